@@ -1,0 +1,24 @@
+using NodaTime;
+
+namespace LoadWatch.People;
+
+/// <summary>Every anchor of every person, asked for by date: a value for a date uses only anchors dated that day or before (I-5).</summary>
+public sealed class AnchorBook
+{
+    private readonly ILookup<(string Person, AnchorKind Kind, string? Exercise), Anchor> anchors;
+
+    public AnchorBook(IEnumerable<Anchor> anchors) =>
+        this.anchors = anchors.ToLookup(anchor => (anchor.Person, anchor.Kind, anchor.Exercise));
+
+    public static AnchorBook Empty { get; } = new([]);
+
+    /// <summary>
+    /// The anchor that holds on <paramref name="date"/>, or null: measured before observed before estimated, then the latest, an undated one last.
+    /// </summary>
+    public Anchor? On(LocalDate date, string person, AnchorKind kind, string? exercise = null) =>
+        anchors[(person, kind, exercise)]
+            .Where(anchor => anchor.Date is null || anchor.Date <= date)
+            .OrderBy(anchor => anchor.Source)
+            .ThenByDescending(anchor => anchor.Date ?? LocalDate.MinIsoValue)
+            .FirstOrDefault();
+}

@@ -1,0 +1,28 @@
+using NodaTime;
+
+namespace LoadWatch.People;
+
+/// <summary>What a contact is to the people watched; decides what a brief may show.</summary>
+public enum ContactRole
+{
+    Coach,
+    Physiotherapist,
+    Clinician,
+    FrontDesk,
+    Self,
+}
+
+/// <summary>Who is told, about which groups, when.</summary>
+/// <param name="Groups">Ids of the groups in the brief, in the order shown.</param>
+/// <param name="People">Ids of single people in the brief, for somebody who watches only themselves; empty for whole groups.</param>
+/// <param name="BriefAt">Local time of the brief.</param>
+/// <param name="BriefDays">Weekdays on which it comes; all seven for daily.</param>
+public sealed record Contact(
+    string Id,
+    string Name,
+    ContactRole Role,
+    IReadOnlyList<string> Groups,
+    IReadOnlyList<string> People,
+    DateTimeZone Zone,
+    LocalTime BriefAt,
+    IReadOnlySet<IsoDayOfWeek> BriefDays);

@@ -1,0 +1,22 @@
+using NodaTime;
+
+namespace LoadWatch.People;
+
+public enum Sex
+{
+    Female,
+    Male,
+}
+
+/// <summary>Somebody who is watched: a line of the roster.</summary>
+/// <param name="Id">Short name used in folders, files and commands; compared without regard to case.</param>
+/// <param name="Name">The name that briefs show.</param>
+/// <param name="Group">Id of the group.</param>
+/// <param name="BirthYear">Gregorian year, or null.</param>
+/// <param name="Sex">Null where not stated: then the mean of the two published pairs is used and marked.</param>
+/// <param name="Zone">The zone whose midnight ends the person's day.</param>
+public sealed record Person(string Id, string Name, string Group, int? BirthYear, Sex? Sex, DateTimeZone Zone)
+{
+    /// <summary>Full years on 31 December of the date's year, or null.</summary>
+    public int? AgeOn(LocalDate date) => BirthYear is { } year ? date.Year - year : null;
+}

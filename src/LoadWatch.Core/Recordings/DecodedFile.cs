@@ -1,0 +1,12 @@
+namespace LoadWatch.Recordings;
+
+/// <summary>What one content holds after decoding: recordings, problems, and for a FIT file what kind of file it says it is.</summary>
+/// <param name="Kind"><c>fit</c> or <c>csv</c>.</param>
+/// <param name="FileType">The FIT file type in the profile's words (<c>activity</c>, <c>settings</c>), or null.</param>
+/// <param name="SourceName">Names what wrote it where no device is stated: the layout of a CSV; null for FIT.</param>
+public sealed record DecodedFile(
+    string Kind,
+    string? FileType,
+    string? SourceName,
+    IReadOnlyList<Recording> Recordings,
+    IReadOnlyList<Problem> Problems);

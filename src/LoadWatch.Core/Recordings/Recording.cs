@@ -1,0 +1,55 @@
+using NodaTime;
+
+namespace LoadWatch.Recordings;
+
+/// <summary>One session as its file tells it: raw, nothing cut, nothing merged.</summary>
+public sealed record Recording
+{
+    /// <summary>Counts the recordings of one file from 1, in file order.</summary>
+    public required int Part { get; init; }
+
+    public required Sport Sport { get; init; }
+
+    /// <summary>Start of the session; null where the file carries no date (device uptime, no clock).</summary>
+    public required Instant? Start { get; init; }
+
+    /// <summary>Local time minus UTC as the device stated it, or null.</summary>
+    public Offset? LocalOffset { get; init; }
+
+    /// <summary>Total elapsed time in seconds, pauses included: the session's own total, else last sample minus first; null without either.</summary>
+    public double? ElapsedSeconds { get; init; }
+
+    /// <summary>Time in seconds during which the timer ran, as the session states it, or null.</summary>
+    public double? TimerSeconds { get; init; }
+
+    public SampleSeries Samples { get; init; } = SampleSeries.Empty;
+
+    /// <summary>Beats delivered in messages of their own (chest straps under water), in time order; not merged into the samples.</summary>
+    public IReadOnlyList<TimedHeartRate> LateHeartRates { get; init; } = [];
+
+    public IReadOnlyList<StrengthSet> Sets { get; init; } = [];
+
+    /// <summary>Stretches during which the timer stood, in time order.</summary>
+    public IReadOnlyList<Pause> Pauses { get; init; } = [];
+
+    public int Laps { get; init; }
+
+    /// <summary>Pool lengths.</summary>
+    public int Lengths { get; init; }
+
+    public Device Device { get; init; } = Device.Unknown;
+}
+
+/// <summary>A heart-rate reading with its own time.</summary>
+/// <param name="UnixMilliseconds">Milliseconds since 1970-01-01T00:00:00Z.</param>
+/// <param name="BeatsPerMinute">1 to 254.</param>
+public readonly record struct TimedHeartRate(long UnixMilliseconds, int BeatsPerMinute);
+
+/// <summary>A stretch during which the timer stood. <paramref name="End"/> is null when it was never started again.</summary>
+public readonly record struct Pause(Instant Start, Instant? End);
+
+/// <summary>The recording device by its numbers as recorded; each null where not stated.</summary>
+public sealed record Device(int? Manufacturer, int? Product, long? Serial)
+{
+    public static Device Unknown { get; } = new(null, null, null);
+}

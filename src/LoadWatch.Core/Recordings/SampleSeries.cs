@@ -1,0 +1,74 @@
+using NodaTime;
+
+namespace LoadWatch.Recordings;
+
+/// <summary>
+/// The samples of one recording as columns, one row per record of the file, in file order. Times may repeat, run backwards or be unknown:
+/// nothing is cut or sorted here.
+/// </summary>
+public sealed class SampleSeries
+{
+    /// <summary>The time of a row that carries none.</summary>
+    public const long Undated = long.MinValue;
+
+    private readonly long[] times;
+    private readonly double[]?[] columns;
+
+    /// <param name="unixMilliseconds">Time of each row, milliseconds since 1970-01-01T00:00:00Z, or <see cref="Undated"/>.</param>
+    /// <param name="columns">Values by channel, one per row; NaN marks a row without a reading. Channels never recorded are left out.</param>
+    /// <exception cref="ArgumentException">A column has another length than the times.</exception>
+    public SampleSeries(long[] unixMilliseconds, IReadOnlyDictionary<Channel, double[]> columns)
+    {
+        ArgumentNullException.ThrowIfNull(unixMilliseconds);
+        ArgumentNullException.ThrowIfNull(columns);
+        times = unixMilliseconds;
+        this.columns = new double[]?[Enum.GetValues<Channel>().Length];
+        foreach (var (channel, values) in columns)
+        {
+            if (values.Length != times.Length)
+            {
+                throw new ArgumentException($"{channel} has {values.Length} values for {times.Length} rows", nameof(columns));
+            }
+
+            this.columns[(int)channel] = values;
+        }
+    }
+
+    /// <summary>A series without rows.</summary>
+    public static SampleSeries Empty { get; } = new([], new Dictionary<Channel, double[]>());
+
+    /// <summary>Number of rows.</summary>
+    public int Count => times.Length;
+
+    /// <summary>Time of each row, milliseconds since 1970-01-01T00:00:00Z, or <see cref="Undated"/>.</summary>
+    public ReadOnlySpan<long> UnixMilliseconds => times;
+
+    /// <summary>The channels that hold at least one reading.</summary>
+    public IEnumerable<Channel> Channels => Enum.GetValues<Channel>().Where(Has);
+
+    /// <summary>The column of a channel, one value per row, NaN where a row has no reading; empty if the channel was never recorded.</summary>
+    public ReadOnlySpan<double> this[Channel channel] => columns[(int)channel];
+
+    /// <summary>Whether the channel holds at least one reading.</summary>
+    public bool Has(Channel channel) => columns[(int)channel] is { } values && Array.Exists(values, value => !double.IsNaN(value));
+
+    /// <summary>Earliest dated row, or null.</summary>
+    public Instant? First => Extreme((a, b) => a < b);
+
+    /// <summary>Latest dated row, or null.</summary>
+    public Instant? Last => Extreme((a, b) => a > b);
+
+    private Instant? Extreme(Func<long, long, bool> better)
+    {
+        long? found = null;
+        foreach (var time in times)
+        {
+            if (time != Undated && (found is not { } best || better(time, best)))
+            {
+                found = time;
+            }
+        }
+
+        return found is { } value ? Instant.FromUnixTimeMilliseconds(value) : null;
+    }
+}

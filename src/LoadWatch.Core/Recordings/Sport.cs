@@ -1,0 +1,18 @@
+namespace LoadWatch.Recordings;
+
+/// <summary>A sport and, where stated, its detail, in the words of the FIT profile: <c>cycling</c>, <c>training/strength_training</c>.</summary>
+public sealed record Sport(string Name, string? Detail = null)
+{
+    public static Sport Generic { get; } = new("generic");
+
+    /// <summary><c>name</c> or <c>name/detail</c>.</summary>
+    public override string ToString() => Detail is null ? Name : $"{Name}/{Detail}";
+
+    /// <summary>The reverse of <see cref="ToString"/>.</summary>
+    public static Sport Parse(string text)
+    {
+        ArgumentException.ThrowIfNullOrWhiteSpace(text);
+        var slash = text.IndexOf('/', StringComparison.Ordinal);
+        return slash < 0 ? new Sport(text) : new Sport(text[..slash], text[(slash + 1)..]);
+    }
+}

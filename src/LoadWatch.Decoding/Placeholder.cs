@@ -1,0 +1,1 @@
+namespace LoadWatch.Decoding.Internal; internal static class Placeholder { }

@@ -1,0 +1,1 @@
+namespace LoadWatch.Delivery.Internal; internal static class Placeholder { }

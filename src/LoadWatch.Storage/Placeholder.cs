@@ -1,0 +1,1 @@
+namespace LoadWatch.Storage.Internal; internal static class Placeholder { }
