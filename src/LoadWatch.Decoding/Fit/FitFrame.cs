@@ -37,7 +37,7 @@ internal readonly record struct FitFrame(int Offset, int HeaderSize, long Size)
         if (End > bytes.Length)
             return Fault($"cut short: {bytes.Length - Offset} of the {Size} bytes that its header states", bytes.Length);
 
-        return FitCrc.Of(bytes[Offset..(int)End]) == 0 ? null : Fault("wrong checksum: the bytes of this part were changed", DataEnd);
+        return FitCrc.Of(bytes[Offset..(int)End]) == 0 ? null : Fault("wrong checksum: this part is damaged or was never finished", DataEnd);
     }
 
     public bool IsUnclosed(ReadOnlySpan<byte> bytes) =>

@@ -56,6 +56,7 @@ internal static class FitFields
     public static class Lap
     {
         public const byte Start = 2;
+        public const byte ElapsedMilliseconds = 7;
     }
 
     public static class Record
