@@ -182,7 +182,7 @@ public class LoadTrendTests
     {
         var days = Daily([.. Enumerable.Repeat(100.0, 600), .. Enumerable.Repeat(200.0, 600)]);
 
-        // On day 781 of the series, counted from 0, the window holds 183 rising or full values above 700 and 182 of 700; one day earlier it is the other way.
+        // The chronic load is 700 up to day 599 and 725 on day 600. The window of day 781 holds 183 values of 700 and 182 above; that of day 782 the other way round.
         Assert.Equal(700, days[781].ChronicMedian);
         Assert.Equal(725, days[782].ChronicMedian);
         Assert.Equal(1400, days[1199].ChronicMedian);
