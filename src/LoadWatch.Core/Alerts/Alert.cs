@@ -1,0 +1,67 @@
+using LoadWatch.Findings;
+using LoadWatch.Stimulus;
+using NodaTime;
+
+namespace LoadWatch.Alerts;
+
+/// <summary>The life of an alert on its two axes, after IEC 62682 / ISA-18.2.</summary>
+public enum AlertState
+{
+    /// <summary>Over, and seen.</summary>
+    Normal,
+
+    /// <summary>The finding holds and nobody has confirmed having seen it.</summary>
+    Unacknowledged,
+
+    /// <summary>The finding holds and somebody has seen it.</summary>
+    Acknowledged,
+
+    /// <summary>Returned to normal before anybody acknowledged it.</summary>
+    Returned,
+}
+
+/// <summary>A finding's life over time.</summary>
+/// <param name="Raised">The evaluation date on which it was raised.</param>
+/// <param name="Judged">The last evaluation date on which its finding held.</param>
+/// <param name="Text">Of the latest finding.</param>
+public sealed record Alert(
+    FindingKey Key,
+    LocalDate Raised,
+    LocalDate Judged,
+    AlertState State,
+    Severity Severity,
+    string Text)
+{
+    /// <summary><c>person|rule|region|raised</c>, the region empty where there is none.</summary>
+    public string Id => $"{Key.Person}|{Key.Rule}|{RegionWord(Key.Region)}|{Raised:uuuu-MM-dd}";
+
+    public static string RegionWord(BodyRegion? region) => region is { } known ? BodyRegions.Word(known) : "";
+}
+
+/// <summary>Why an alert changed.</summary>
+public enum AlertChangeReason
+{
+    Raised,
+    SeverityRose,
+    SeverityFell,
+    Acknowledged,
+    ReturnedToNormal,
+
+    /// <summary>Late or corrected data undid it on the very date it was judged (I-14).</summary>
+    Corrected,
+    RaisedAgain,
+}
+
+/// <summary>One appended row of an alert's history, with the evidence of its moment.</summary>
+/// <param name="Sequence">Counts the changes of the alert from 1.</param>
+/// <param name="Date">The evaluation date.</param>
+public sealed record AlertChange(
+    string AlertId,
+    int Sequence,
+    LocalDate Date,
+    AlertState From,
+    AlertState To,
+    AlertChangeReason Reason,
+    Severity Severity,
+    string Text,
+    Evidence? Evidence);

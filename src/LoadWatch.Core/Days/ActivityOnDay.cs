@@ -1,0 +1,16 @@
+using LoadWatch.Stimulus;
+using NodaTime;
+
+namespace LoadWatch.Days;
+
+/// <summary>What the day series needs to know of an activity.</summary>
+/// <param name="Key">Key of the activity.</param>
+/// <param name="Date">The local date that it counts for.</param>
+/// <param name="Sources">The devices or layouts that recorded it (I-6).</param>
+/// <param name="Load">The group's load quantity, or null where it could not be computed.</param>
+public sealed record ActivityOnDay(
+    string Key,
+    LocalDate Date,
+    IReadOnlyList<string> Sources,
+    double? Load,
+    IReadOnlyList<RegionStimulus> Stimulus);

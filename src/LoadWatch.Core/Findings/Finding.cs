@@ -1,0 +1,41 @@
+using LoadWatch.Stimulus;
+using NodaTime;
+
+namespace LoadWatch.Findings;
+
+/// <summary>A rule that holds for a person on a date.</summary>
+/// <param name="Rule">Name of the rule: <c>load_ratio</c>, <c>stimulus_gap</c>, <c>silence</c>.</param>
+/// <param name="Region">For stimulus rules.</param>
+/// <param name="Since">First date of the unbroken run of this finding.</param>
+/// <param name="Value">The value on the date, rounded to 9 significant digits.</param>
+/// <param name="Limit">The limit that it passed.</param>
+/// <param name="Unit">Of value and limit; <c>ratio</c> or <c>days</c>.</param>
+/// <param name="Text">One sentence without a name: what, since when, against the usual.</param>
+public sealed record Finding(
+    string Person,
+    LocalDate Date,
+    string Rule,
+    BodyRegion? Region,
+    Severity Severity,
+    LocalDate Since,
+    double Value,
+    double Limit,
+    string Unit,
+    string Text,
+    Evidence Evidence)
+{
+    /// <summary>What the finding is about, the same on every date.</summary>
+    public FindingKey Key => new(Person, Rule, Region);
+}
+
+/// <summary>What a finding or an alert is about: a person, a rule, and for stimulus rules a region.</summary>
+public readonly record struct FindingKey(string Person, string Rule, BodyRegion? Region);
+
+/// <summary>What a number rests on (I-8), enough to compute it again.</summary>
+/// <param name="Formula">In words and symbols.</param>
+/// <param name="Source">Authors, year, title; or <c>a choice</c>.</param>
+/// <param name="Inputs">Inputs and intermediate values.</param>
+public sealed record Evidence(string Formula, string Source, IReadOnlyList<EvidenceItem> Inputs);
+
+/// <summary>One number of the evidence; null is unknown.</summary>
+public sealed record EvidenceItem(string Name, double? Value, string Unit, string? Note = null);

@@ -1,0 +1,18 @@
+using LoadWatch.Days;
+using LoadWatch.People;
+
+namespace LoadWatch.Findings;
+
+/// <summary>One rule. Pure: the same days give the same findings.</summary>
+public interface IRule
+{
+    /// <summary>Lower-case words joined by underscores; part of alert ids.</summary>
+    string Name { get; }
+
+    /// <summary>
+    /// The findings of every date in <paramref name="days"/> on which the rule holds, in date order. Raise and return values make the run; an unknown
+    /// stretch alone neither raises nor clears (I-6).
+    /// </summary>
+    /// <param name="days">Unbroken days of the person, oldest first.</param>
+    IEnumerable<Finding> Evaluate(Person person, IReadOnlyList<Day> days, RuleLimits limits);
+}

@@ -1,0 +1,80 @@
+using LoadWatch.Findings;
+using LoadWatch.Stimulus;
+using NodaTime;
+
+namespace LoadWatch.Notices;
+
+/// <summary>One contact's morning page as values, before it becomes text or HTML.</summary>
+public sealed record Brief
+{
+    public required string ContactId { get; init; }
+
+    public required string ContactName { get; init; }
+
+    /// <summary>The contact's local date on which it is due.</summary>
+    public required LocalDate Date { get; init; }
+
+    /// <summary>Readable in five seconds, without names.</summary>
+    public required string FirstLine { get; init; }
+
+    /// <summary>At most ten people to act on, warnings first, then by name.</summary>
+    public required IReadOnlyList<FlaggedPerson> Flagged { get; init; }
+
+    /// <summary>Flagged people beyond those ten, count.</summary>
+    public required int FlaggedBeyond { get; init; }
+
+    /// <summary>Alerts that returned since the contact's last brief.</summary>
+    public required IReadOnlyList<BriefLine> Returned { get; init; }
+
+    /// <summary>Files held or refused and other things that need an answer.</summary>
+    public required IReadOnlyList<BriefLine> Questions { get; init; }
+
+    public required IReadOnlyList<BriefGroup> Groups { get; init; }
+}
+
+/// <summary>One person to act on.</summary>
+public sealed record FlaggedPerson(string PersonId, string Name, Severity Severity, IReadOnlyList<FlaggedReason> Reasons);
+
+/// <summary>One alert of a flagged person.</summary>
+/// <param name="Sentence">What, since when, against the usual.</param>
+/// <param name="Consider">What to consider.</param>
+/// <param name="Decides">Who decides.</param>
+/// <param name="IsNew">Not told in an earlier brief.</param>
+public sealed record FlaggedReason(string AlertId, string Rule, BodyRegion? Region, string Sentence, string Consider, string Decides, bool IsNew);
+
+/// <summary>One line about somebody or something.</summary>
+/// <param name="Subject">A name, or a file name.</param>
+public sealed record BriefLine(string Subject, string Sentence);
+
+/// <summary>One group in a compact table, sorted by name.</summary>
+public sealed record BriefGroup(string Id, string Name, string LoadUnit, IReadOnlyList<BriefRow> Rows);
+
+/// <summary>One person in the group's table. Unknown is null.</summary>
+/// <param name="LastRecorded">Date of the last recording.</param>
+/// <param name="WeekLoad">Load of the last 7 days, in the group's unit.</param>
+/// <param name="UsualWeekLoad">Mean week of the 21 days before.</param>
+/// <param name="Ratio">The uncoupled ratio of the two.</param>
+/// <param name="KnownDays">Days with known load among the last 7.</param>
+/// <param name="DaysSinceHeavyLegs">Days since the last heavy-or-fast day of the legs.</param>
+/// <param name="HeavyLegsDays28">Heavy-or-fast days of the legs among the last 28.</param>
+/// <param name="Recent">The last 28 days, oldest first.</param>
+/// <param name="Remark">Why a number is missing, in plain words, or null.</param>
+public sealed record BriefRow(
+    string PersonId,
+    string Name,
+    bool Flagged,
+    LocalDate? LastRecorded,
+    double? WeekLoad,
+    double? UsualWeekLoad,
+    double? Ratio,
+    int KnownDays,
+    int? DaysSinceHeavyLegs,
+    int? HeavyLegsDays28,
+    IReadOnlyList<BriefDay> Recent,
+    string? Remark);
+
+/// <summary>One day of the small strip beside a name.</summary>
+/// <param name="Known">False where nothing is known.</param>
+/// <param name="Load">In the group's unit; null where unknown or not computable.</param>
+/// <param name="HeavyLegs">Heavy or fast work of the legs; null where unknown.</param>
+public sealed record BriefDay(LocalDate Date, bool Known, double? Load, bool? HeavyLegs);

@@ -1,0 +1,23 @@
+using LoadWatch.Alerts;
+using LoadWatch.Days;
+using LoadWatch.People;
+
+namespace LoadWatch.Notices;
+
+/// <summary>What a brief is built from for one person.</summary>
+/// <param name="Group">The person's group.</param>
+/// <param name="Days">Unbroken days up to the evaluation date, oldest first, at most the last 400.</param>
+/// <param name="Alerts">Every alert that is not normal, and those that became normal or returned since the contact's last brief.</param>
+/// <param name="Remarks">Why something could not be computed lately, in plain words.</param>
+public sealed record BriefSubject(
+    Person Person,
+    Group Group,
+    IReadOnlyList<Day> Days,
+    IReadOnlyList<AlertNews> Alerts,
+    IReadOnlyList<string> Remarks);
+
+/// <summary>An alert as a contact meets it.</summary>
+/// <param name="IsNew">Raised, raised again or risen since the contact's last brief.</param>
+/// <param name="ReturnedSince">It returned since the contact's last brief.</param>
+/// <param name="Corrected">It returned because later data undid it.</param>
+public sealed record AlertNews(Alert Alert, bool IsNew, bool ReturnedSince, bool Corrected);

@@ -1,0 +1,34 @@
+using NodaTime;
+
+namespace LoadWatch.Notices;
+
+/// <summary>What one contact is told, frozen when it was decided (I-7).</summary>
+/// <param name="Key"><c>contact|kind|local date</c>: unique, so a missed schedule is caught up and a double one does nothing.</param>
+/// <param name="Subject">Holds neither names nor values.</param>
+/// <param name="Text">Plain text that stands alone.</param>
+/// <param name="Html">One self-contained page.</param>
+/// <param name="Reason">Why now.</param>
+public sealed record Notice(
+    string Key,
+    string ContactId,
+    LocalDate Date,
+    string Subject,
+    string Text,
+    string Html,
+    NoticeReason Reason);
+
+/// <summary>Why a notice is told, or not.</summary>
+public enum NoticeReason
+{
+    /// <summary>The scheduled brief is due.</summary>
+    BriefDue,
+
+    /// <summary>The brief's time has not come.</summary>
+    NotYetDue,
+
+    /// <summary>Not one of the contact's days.</summary>
+    NotADay,
+
+    /// <summary>It was decided before.</summary>
+    AlreadyDecided,
+}
