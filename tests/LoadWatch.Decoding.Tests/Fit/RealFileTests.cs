@@ -56,6 +56,36 @@ public class RealFileTests
         Assert.Equal(expected.Number("session_timer_s")!.Value, decoded.Recordings.Sum(recording => recording.TimerSeconds ?? 0), 1.0);
     }
 
+    [Theory]
+    [InlineData("r004.fit", 0, "byte 768: cut short")]
+    [InlineData("r005.fit", 1, "byte 771: 83 bytes behind the last whole part")]
+    [InlineData("r012.fit", 0, "byte 253838: wrong checksum")]
+    [InlineData("r013.fit", 0, "byte 769: wrong checksum")]
+    [InlineData("r019.fit", 1, "byte 1540: wrong checksum")]
+    [InlineData("r020.fit", 1, "byte 786: cut short")]
+    [InlineData("r021.fit", 0, "byte 403454: wrong checksum")]
+    [InlineData("r023.fit", 0, "byte 78233: cut short")]
+    public void DamagedFilesKeepTheirWholePartsAndNameThePlace(string name, int recordings, string problem)
+    {
+        RealFiles.Get(name);
+        var decoded = FitDecoder.Decode(RealFiles.Bytes(name));
+        Assert.Equal(recordings, decoded.Recordings.Count);
+        Assert.StartsWith(problem, Assert.Single(decoded.Problems).ToString(), StringComparison.Ordinal);
+        Assert.Equal(FitCompleteness.Suspect, FitDecoder.CheckCompleteness(RealFiles.Bytes(name)));
+    }
+
+    [Theory]
+    [InlineData("r037.fit")]
+    [InlineData("r051.fit")]
+    public void FilesThatCountUptimeHaveNoDates(string name)
+    {
+        RealFiles.Get(name);
+        var recording = Assert.Single(FitDecoder.Decode(RealFiles.Bytes(name)).Recordings);
+        Assert.Null(recording.Start);
+        Assert.Null(recording.Samples.First);
+        Assert.NotEqual(0, recording.Samples.Count);
+    }
+
     private static void Close(Instant? expected, Instant? actual)
     {
         Assert.Equal(expected is null, actual is null);
