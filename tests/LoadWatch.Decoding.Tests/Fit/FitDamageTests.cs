@@ -53,6 +53,20 @@ public class FitDamageTests
             .Sample((message, endian, fields, data) => FitDecoder.Decode(Wrapped(Defined(message, endian, fields, data))).Problems.Count <= 1);
 
     [Fact]
+    public void ChangedFilesWithARightChecksumAreSurvived() =>
+        Gen.Select(Gen.Int[0, 14], Gen.Select(Gen.Int[0, 200], Gen.Byte).Array[1, 6]).Sample((vector, changes) =>
+        {
+            var file = FitVectors.All.ElementAt(vector);
+            var data = file[file[0]..^2];
+            foreach (var (at, value) in changes)
+                data[at % data.Length] = value;
+
+            var decoded = FitDecoder.Decode(Wrapped(data));
+            Assert.InRange(decoded.Problems.Count, 0, 1);
+            Assert.True(decoded.Problems.Count == 0 || decoded.Recordings.Count == 0);
+        });
+
+    [Fact]
     public void AnUndefinedLocalTypeIsRefusedAtItsByte()
     {
         var bytes = Wrapped([0x0B, 0, 0]);

@@ -54,12 +54,20 @@ public class FitTimeTests
     [Fact]
     public void UptimeIsNoDate()
     {
-        var decoded = Parts.Begin().DefineRecord().Message(0, 5000, 100).Message(0, 0x0FFFFFFF, 100).Message(0, 0x10000000, 100)
+        var decoded = Parts.Begin().DefineRecord().Message(0, 5000, 100).Message(0, 0x0FFFFFFF, 100)
             .DefineSession().Message(1, 5000, 1, 0, 1000, 1000).Decode();
         var recording = Assert.Single(decoded.Recordings);
         Assert.Null(recording.Start);
-        Assert.Equal(1000L * (0x10000000 + 631_065_600L), recording.Samples.UnixMilliseconds[2]);
-        Assert.Equal([SampleSeries.Undated, SampleSeries.Undated], recording.Samples.UnixMilliseconds[..2]);
+        Assert.Equal([SampleSeries.Undated, SampleSeries.Undated], recording.Samples.UnixMilliseconds);
+    }
+
+    [Fact]
+    public void WhereTheSessionHasNoDateTheFirstDatedSampleStartsIt()
+    {
+        var decoded = Parts.Begin().DefineRecord().Message(0, 0x0FFFFFFF, 100).Message(0, 0x10000000, 100)
+            .DefineSession().Message(1, 5000, 1, 0, 1000, 1000).Decode();
+        var start = Assert.Single(decoded.Recordings).Start;
+        Assert.Equal(1000L * (0x10000000 + 631_065_600L), start!.Value.ToUnixTimeMilliseconds());
     }
 
     [Fact]

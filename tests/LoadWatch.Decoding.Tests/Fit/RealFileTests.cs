@@ -25,6 +25,7 @@ public class RealFileTests
         var decoded = FitDecoder.Decode(RealFiles.Bytes(name));
         Assert.Empty(decoded.Problems);
         Assert.Equal(expected.FileType, decoded.FileType);
+        Assert.Equal(expected.Sports, decoded.Recordings.Select(recording => Plain(recording.Sport)).Distinct());
         Assert.Equal(expected.Int("records"), decoded.Recordings.Sum(recording => recording.Samples.Count));
         Assert.Equal(expected.Int("sessions"), decoded.Recordings.Count);
         Assert.Equal(expected.Int("sets"), decoded.Recordings.Sum(recording => recording.Sets.Count));
@@ -85,6 +86,8 @@ public class RealFileTests
         Assert.Null(recording.Samples.First);
         Assert.NotEqual(0, recording.Samples.Count);
     }
+
+    private static string Plain(Sport sport) => sport.ToString().Replace("_", "", StringComparison.Ordinal);
 
     private static void Close(Instant? expected, Instant? actual)
     {
