@@ -1,0 +1,127 @@
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Decoding.Fit;
+
+/// <summary>
+/// Reads FIT files. A part that is cut or damaged is refused with the place of the fault and gives no recording; whole parts stand. Whatever the
+/// bytes, the answer is a value.
+/// </summary>
+public sealed class FitDecoder
+{
+    internal const int ActivityType = 4;
+    internal const int UnknownExercise = 65534;
+    private const int MostProblems = 16;
+    private readonly ReadOnlyMemory<byte> bytes;
+    private readonly MemoryBudget budget;
+    private readonly List<Recording> recordings = [];
+    private readonly List<Problem> problems = [];
+    private readonly List<int?> fileTypes = [];
+    private PartContent? pending;
+
+    private FitDecoder(ReadOnlyMemory<byte> bytes)
+    {
+        this.bytes = bytes;
+        budget = new MemoryBudget(bytes.Length);
+    }
+
+    /// <summary>Whether the bytes begin with the header of a FIT file; whether the file is whole is another question.</summary>
+    public static bool LooksLikeFit(ReadOnlySpan<byte> bytes) => FitFrame.HasHeader(bytes);
+
+    /// <summary>Whether the file is whole by its own sizes and checksums.</summary>
+    public static FitCompleteness CheckCompleteness(ReadOnlySpan<byte> bytes)
+    {
+        var offset = 0;
+        while (offset < bytes.Length)
+        {
+            if (!FitFrame.HasHeader(bytes[offset..]) || FitFrame.At(bytes, offset) is var frame && frame.Check(bytes) is not null)
+                return FitCompleteness.Suspect;
+
+            offset = (int)frame.End;
+        }
+
+        return bytes.IsEmpty ? FitCompleteness.Suspect : FitCompleteness.Complete;
+    }
+
+    /// <summary>The recordings of a file, one per session, and what was wrong with it. Never throws for what the bytes hold.</summary>
+    public static DecodedFile Decode(ReadOnlyMemory<byte> bytes) => new FitDecoder(bytes).Decode();
+
+    private DecodedFile Decode()
+    {
+        if (bytes.Length < FitFrame.ShortHeader + FitFrame.CrcSize)
+            problems.Add(new Problem(ProblemSeverity.Error, $"too small for a FIT file: {bytes.Length} bytes", 0));
+        else
+            ReadParts();
+
+        Settle();
+        return new DecodedFile("fit", FileType(), SourceName: null, recordings, problems);
+    }
+
+    private void ReadParts()
+    {
+        for (long offset = 0; offset < bytes.Length && problems.Count < MostProblems;)
+        {
+            if (!FitFrame.HasHeader(bytes.Span[(int)offset..]))
+            {
+                NoteStray(offset);
+                return;
+            }
+
+            offset = ReadPart(FitFrame.At(bytes.Span, (int)offset));
+        }
+    }
+
+    private void NoteStray(long offset)
+    {
+        if (offset == 0)
+            problems.Add(new Problem(ProblemSeverity.Error, "not a FIT header", 0));
+        else if (problems.Count == 0)
+            problems.Add(new Problem(ProblemSeverity.Warning, $"{bytes.Length - offset} bytes behind the last whole part, no FIT header", offset));
+    }
+
+    /// <summary>Takes a part up, and answers where the next may begin.</summary>
+    private long ReadPart(FitFrame frame)
+    {
+        var reader = new FitPartReader(budget);
+        var fault = frame.Check(bytes.Span)
+            ?? reader.Read(bytes.Span[frame.DataStart..(int)frame.DataEnd], frame.DataStart);
+        if (fault is null)
+            Take(reader.Content);
+        else
+            Refuse(fault);
+
+        return fault is not null && frame.IsUnclosed(bytes.Span) ? bytes.Length : frame.End;
+    }
+
+    private void Refuse(Problem fault)
+    {
+        Settle();
+        problems.Add(fault);
+    }
+
+    /// <summary>Beats in parts of their own belong to the activity before them, so an activity waits for the part behind it.</summary>
+    private void Take(PartContent content)
+    {
+        fileTypes.Add(content.FileType);
+        if (content.HasOnlyBeats)
+            pending?.Late.Beats.AddRange(content.Late.Beats);
+        else if (content.HasTraining)
+        {
+            Settle();
+            pending = content;
+        }
+    }
+
+    private void Settle()
+    {
+        if (pending is { } content)
+            recordings.AddRange(PartRecordings.Of(content, recordings.Count + 1));
+
+        pending = null;
+    }
+
+    private string? FileType()
+    {
+        var type = fileTypes.Contains(ActivityType) ? ActivityType : fileTypes.FirstOrDefault();
+        return type is { } number ? FitWords.FileTypes[number] : null;
+    }
+}

@@ -1,0 +1,68 @@
+using System.Buffers.Binary;
+
+namespace LoadWatch.Decoding.Fit;
+
+/// <summary>
+/// Heart rates delivered in messages of their own. One message ties the strap's clock to a date (the anchor); the beats that follow carry the
+/// strap's time, in full or as its low 12 bits, in 1/1024 s. The strap's clock runs over at 32 bits.
+/// </summary>
+internal sealed class LateBeats(MemoryBudget budget)
+{
+    private const int BytesPerBeat = 16;
+    private const int Mask = 0xFFF;
+    private long? anchorTime;
+    private uint anchorEvent;
+    private uint eventTime;
+
+    /// <summary>Beats in file order; their times are milliseconds of the FIT epoch or of the device's uptime.</summary>
+    public List<(long Time, int BeatsPerMinute)> Beats { get; } = [];
+
+    public void Read(in FitMessage message)
+    {
+        var rates = message.Values(FitFields.HeartRate.BeatsPerMinute, 1);
+        var full = message.Values(FitFields.HeartRate.EventTime, 4);
+        if (message.Time(FitFields.Timestamp) is { } time && full.Length > 0)
+            Anchor(time + Fraction(message), FitNumber.UInt32(full, message.BigEndian));
+
+        if (full.Length > 0)
+            ReadFull(full, rates, message.BigEndian);
+        else
+            ReadPacked(message.Values(FitFields.HeartRate.EventTime12, 1), rates);
+    }
+
+    private static long Fraction(in FitMessage message) =>
+        message.Int(FitFields.HeartRate.Fraction) is { } fine ? fine * 1000L / 32768
+        : message.Int(FitFields.HeartRate.Fraction256) is { } coarse ? coarse * 1000L / 256
+        : 0;
+
+    private void Anchor(long time, uint strapTime) => (anchorTime, anchorEvent) = (time, strapTime);
+
+    private void ReadFull(ReadOnlySpan<byte> times, ReadOnlySpan<byte> rates, bool bigEndian)
+    {
+        for (var i = 0; i < times.Length / 4; i++)
+        {
+            eventTime = FitNumber.UInt32(times[(i * 4)..], bigEndian);
+            Add(rates, i);
+        }
+    }
+
+    private void ReadPacked(ReadOnlySpan<byte> bytes, ReadOnlySpan<byte> rates)
+    {
+        for (var i = 0; i < bytes.Length * 2 / 3 && i < rates.Length; i++)
+        {
+            var pair = BinaryPrimitives.ReadUInt16LittleEndian(bytes[(i * 3 / 2)..]);
+            var low = (uint)(i % 2 == 0 ? pair & Mask : pair >> 4);
+            eventTime = unchecked(eventTime + ((low - eventTime) & Mask));
+            Add(rates, i);
+        }
+    }
+
+    private void Add(ReadOnlySpan<byte> rates, int index)
+    {
+        if (anchorTime is not { } time || index >= rates.Length || rates[index] is 0 or byte.MaxValue)
+            return;
+
+        Beats.Add((time + (unchecked(eventTime - anchorEvent) * 1000L / 1024), rates[index]));
+        budget.Spend(BytesPerBeat * 2);
+    }
+}

@@ -1,0 +1,156 @@
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Decoding.Fit;
+
+/// <summary>What one part says, times still as in the file: milliseconds of the FIT epoch or of the device's uptime.</summary>
+internal sealed class PartContent(MemoryBudget budget)
+{
+    private const int SessionCost = 1200;
+    private const int SetCost = 256;
+    private const int SmallCost = 64;
+    private const int Quarter = 15 * 60;
+    private const int MostOffsetSeconds = 18 * 3600;
+
+    public int? FileType { get; private set; }
+
+    public Device Device { get; private set; } = Device.Unknown;
+
+    public Sport? StatedSport { get; private set; }
+
+    /// <summary>Local time minus UTC in seconds, to the quarter of an hour.</summary>
+    public int? LocalOffsetSeconds { get; private set; }
+
+    public FitClock Clock { get; private set; } = FitClock.Plain;
+
+    public List<SessionFacts> Sessions { get; } = [];
+
+    public List<(long? Start, StrengthSet Set)> Sets { get; } = [];
+
+    public List<long?> Laps { get; } = [];
+
+    public List<long?> Lengths { get; } = [];
+
+    public TimerPauses Pauses { get; } = new();
+
+    public SampleColumns Samples { get; } = new(budget);
+
+    public LateBeats Late { get; } = new(budget);
+
+    public bool HasTraining => IsTrainingType && (Sessions.Count > 0 || Samples.Count > 0 || Sets.Count > 0);
+
+    /// <summary>Whether it only brings beats that belong to the activity before it.</summary>
+    public bool HasOnlyBeats => Late.Beats.Count > 0 && Sessions.Count == 0 && Samples.Count == 0 && Sets.Count == 0;
+
+    /// <summary>A course holds records too; only what is called an activity, or nothing that the profile names, is training.</summary>
+    private bool IsTrainingType => FileType is not { } type || type == FitDecoder.ActivityType || !FitWords.FileTypes.Knows(type);
+
+    public void Read(in FitMessage message, int kind, long? time)
+    {
+        switch (kind)
+        {
+            case FitMessages.FileId:
+                ReadFileId(message);
+                break;
+            case FitMessages.DeviceInfo:
+                ReadDeviceInfo(message);
+                break;
+            case FitMessages.Sport:
+                StatedSport = SportOf(message, FitFields.Sport.Name, FitFields.Sport.Detail);
+                break;
+            case FitMessages.Session:
+                ReadSession(message);
+                break;
+            case FitMessages.Lap:
+                Keep(Laps, message.Time(FitFields.Lap.Start) ?? time, SmallCost);
+                break;
+            case FitMessages.Length:
+                Keep(Lengths, message.Time(FitFields.Lap.Start) ?? time, SmallCost);
+                break;
+            case FitMessages.Event:
+                Pauses.Read(message, time);
+                budget.Spend(SmallCost);
+                break;
+            case FitMessages.Set:
+                ReadSet(message);
+                break;
+            case FitMessages.HeartRate:
+                Late.Read(message);
+                break;
+            case FitMessages.Activity:
+                ReadActivity(message, time);
+                break;
+            case FitMessages.TimestampCorrelation:
+                Clock = Clock.Correlated(time, message.Time(FitFields.TimestampCorrelation.SystemTimestamp));
+                break;
+        }
+    }
+
+    private static Sport SportOf(in FitMessage message, byte name, byte detail)
+    {
+        var sub = message.Int(detail) is { } number and not 0 ? FitWords.SubSports[number] : null;
+        return message.Int(name) is { } sport ? new Sport(FitWords.Sports[sport], sub) : new Sport(Sport.Generic.Name, sub);
+    }
+
+    private void Keep<T>(List<T> list, T item, int cost)
+    {
+        list.Add(item);
+        budget.Spend(cost);
+    }
+
+    private void ReadFileId(in FitMessage message)
+    {
+        FileType ??= message.Int(FitFields.FileId.Type);
+        Device = new(
+            message.Int(FitFields.FileId.Manufacturer) ?? Device.Manufacturer,
+            message.Int(FitFields.FileId.Product) ?? Device.Product,
+            message.UInt(FitFields.FileId.Serial) ?? Device.Serial);
+    }
+
+    /// <summary>The recording device describes itself under index 0; what the file's own words left open is filled.</summary>
+    private void ReadDeviceInfo(in FitMessage message)
+    {
+        if (message.Int(FitFields.DeviceInfo.Index) != 0)
+            return;
+
+        Device = new(
+            Device.Manufacturer ?? message.Int(FitFields.DeviceInfo.Manufacturer),
+            Device.Product ?? message.Int(FitFields.DeviceInfo.Product),
+            Device.Serial ?? message.UInt(FitFields.DeviceInfo.Serial));
+    }
+
+    private void ReadSession(in FitMessage message) => Keep(
+        Sessions,
+        new SessionFacts(
+            message.Time(FitFields.Session.Start),
+            SportOf(message, FitFields.Session.Sport, FitFields.Session.SubSport),
+            message.Number(FitFields.Session.ElapsedMilliseconds) / 1000,
+            message.Number(FitFields.Session.TimerMilliseconds) / 1000),
+        SessionCost);
+
+    private void ReadSet(in FitMessage message)
+    {
+        var start = message.Time(FitFields.Set.Start) ?? message.Time(FitFields.Set.Timestamp);
+        var category = message.Int(FitFields.Set.Category);
+        var set = new StrengthSet(
+            Start: null,
+            message.Number(FitFields.Set.DurationMilliseconds) / 1000,
+            Active: message.Int(FitFields.Set.Type) != 0,
+            category is { } number and not FitDecoder.UnknownExercise ? FitWords.ExerciseCategories[number] : null,
+            message.Int(FitFields.Set.Repetitions),
+            message.Number(FitFields.Set.WeightSixteenths) / 16);
+        Keep(Sets, (start, set), SetCost);
+    }
+
+    private void ReadActivity(in FitMessage message, long? time)
+    {
+        if (!FitClock.IsDate(time) || message.Time(FitFields.Activity.LocalTimestamp) is not { } local)
+            return;
+
+        var seconds = (long)Math.Round((local - time!.Value) / (1000.0 * Quarter)) * Quarter;
+        if (Math.Abs(seconds) <= MostOffsetSeconds)
+            LocalOffsetSeconds = (int)seconds;
+    }
+}
+
+/// <summary>What a session message states; null where it does not.</summary>
+internal sealed record SessionFacts(long? Start, Sport Sport, double? ElapsedSeconds, double? TimerSeconds);

@@ -1,0 +1,76 @@
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Decoding.Fit;
+
+/// <summary>The record messages of a part as columns, in file order.</summary>
+internal sealed class SampleColumns
+{
+    private static readonly int ChannelCount = Enum.GetValues<Channel>().Length;
+    private readonly SparseColumn<long> times;
+    private readonly SparseColumn<double>[] channels;
+    private PackedSpeedDistance packed;
+
+    public SampleColumns(MemoryBudget budget)
+    {
+        times = new(SampleSeries.Undated, sizeof(long), budget);
+        channels = new SparseColumn<double>[ChannelCount];
+        for (var i = 0; i < channels.Length; i++)
+            channels[i] = new(double.NaN, sizeof(double), budget);
+    }
+
+    public int Count { get; private set; }
+
+    /// <summary>Milliseconds of the FIT epoch or of the device's uptime, or <see cref="SampleSeries.Undated"/>.</summary>
+    public SparseColumn<long> Times => times;
+
+    public SparseColumn<double> this[Channel channel] => channels[(int)channel];
+
+    /// <summary>Adds a row. A channel takes the first of its sources that holds a value.</summary>
+    public void Add(MessagePlan plan, ReadOnlySpan<byte> payload, long time)
+    {
+        var row = Count++;
+        times.Set(row, time);
+        var filled = Fill(plan.Native, plan, payload, row, 0);
+        if (Filled(filled, Channel.Distance))
+            packed.Restart(this[Channel.Distance][row]);
+
+        if (plan.PackedOffset >= 0)
+            filled = Unpack(payload.Slice(plan.PackedOffset, PackedSpeedDistance.Size), row, filled);
+
+        if (plan.Developer.Length > 0)
+            Fill(plan.Developer, plan, payload, row, filled);
+    }
+
+    private int Fill(ChannelSource[] sources, MessagePlan plan, ReadOnlySpan<byte> payload, int row, int filled)
+    {
+        foreach (var source in sources)
+        {
+            if (!Filled(filled, source.Channel) && source.Read(payload, plan.BigEndian) is var value && double.IsFinite(value))
+                filled |= Set(source.Channel, row, value);
+        }
+
+        return filled;
+    }
+
+    private int Unpack(ReadOnlySpan<byte> bytes, int row, int filled)
+    {
+        if (!PackedSpeedDistance.IsValid(bytes))
+            return filled;
+
+        if (!Filled(filled, Channel.Speed))
+            filled |= Set(Channel.Speed, row, PackedSpeedDistance.SpeedMetresPerSecond(bytes));
+
+        if (!Filled(filled, Channel.Distance))
+            filled |= Set(Channel.Distance, row, packed.Advance(bytes));
+
+        return filled;
+    }
+
+    private static bool Filled(int filled, Channel channel) => (filled & (1 << (int)channel)) != 0;
+
+    private int Set(Channel channel, int row, double value)
+    {
+        channels[(int)channel].Set(row, value);
+        return 1 << (int)channel;
+    }
+}
