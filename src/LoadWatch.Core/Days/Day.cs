@@ -84,4 +84,8 @@ public sealed record Day
 /// <param name="DaysSince">Days since the last heavy-or-fast day, 0 on one; where there was none, days since the region's first covered day; null before any covered day.</param>
 /// <param name="KnownDaysSince">How many of the days after the last heavy-or-fast day up to this date are known.</param>
 /// <param name="UsualGapDays">The person's usual gap between heavy-or-fast days: the median over the last 365 days, days; null under 4 gaps.</param>
-public sealed record RegionDay(bool? HeavyOrFast, int? Days7, int? Days28, int? DaysSince, int KnownDaysSince, double? UsualGapDays);
+public sealed record RegionDay(bool? HeavyOrFast, int? Days7, int? Days28, int? DaysSince, int KnownDaysSince, double? UsualGapDays)
+{
+    /// <summary>Before any channel could see the region.</summary>
+    public static RegionDay NotCovered { get; } = new(null, null, null, null, 0, null);
+}

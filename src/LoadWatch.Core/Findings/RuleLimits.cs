@@ -90,4 +90,8 @@ public sealed record SilenceLimits
     /// <summary>How far back gaps are looked at. Days.</summary>
     [Range(28, 400)]
     public int LookBackDays { get; init; } = 84;
+
+    /// <summary>Longer than this is silence whatever the person's own gaps were. Days.</summary>
+    [Range(7, 400)]
+    public int CeilingDays { get; init; } = 42;
 }

@@ -1,0 +1,24 @@
+using NodaTime;
+
+namespace LoadWatch.Days;
+
+/// <summary>A date of the series before its trends.</summary>
+/// <param name="Index">Days since the first date of the series.</param>
+/// <param name="DaysSinceRecorded">0 on a recorded date.</param>
+/// <param name="Activities">Of the date, in key order.</param>
+internal sealed record CalendarDate(
+    LocalDate Date,
+    int Index,
+    DayState State,
+    string? StateSource,
+    int DaysSinceRecorded,
+    IReadOnlyList<ActivityOnDay> Activities)
+{
+    /// <summary>0 for rest; null when unknown or when one of the activities has no load: a part of a day is not the day.</summary>
+    public double? Load => State switch
+    {
+        DayState.Rest => 0,
+        DayState.Recorded when Activities.All(activity => activity.Load.HasValue) => Significant.Round(Activities.Sum(activity => activity.Load!.Value)),
+        _ => null,
+    };
+}

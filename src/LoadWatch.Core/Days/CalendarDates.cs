@@ -1,0 +1,75 @@
+using NodaTime;
+
+namespace LoadWatch.Days;
+
+/// <summary>Lays activities out on unbroken dates and settles the state of every date (I-6).</summary>
+internal static class CalendarDates
+{
+    /// <summary>A recording speaks for its source's empty days up to this many days before it. Days.</summary>
+    private const int SettledDaysBack = 7;
+
+    public static IEnumerable<CalendarDate> Lay(IReadOnlyList<ActivityOnDay> activities, LocalDate through)
+    {
+        var counted = activities.Where(activity => activity.Date <= through).ToList();
+        return counted.Count == 0 ? [] : Settle(counted.Min(activity => activity.Date), ByDate(counted, through));
+    }
+
+    private static List<ActivityOnDay>[] ByDate(List<ActivityOnDay> activities, LocalDate through)
+    {
+        var first = activities.Min(activity => activity.Date);
+        var dates = new List<ActivityOnDay>[Period.DaysBetween(first, through) + 1];
+        for (var index = 0; index < dates.Length; index++)
+        {
+            dates[index] = [];
+        }
+
+        foreach (var activity in activities.OrderBy(activity => activity.Key, StringComparer.Ordinal))
+        {
+            dates[Period.DaysBetween(first, activity.Date)].Add(activity);
+        }
+
+        return dates;
+    }
+
+    private static IEnumerable<CalendarDate> Settle(LocalDate first, List<ActivityOnDay>[] dates)
+    {
+        var witnesses = Witnesses(dates);
+        var recorded = 0;
+        for (var index = 0; index < dates.Length; index++)
+        {
+            recorded = dates[index].Count > 0 ? index : recorded;
+            var (state, source) = State(dates[index].Count > 0, witnesses[index]);
+            yield return new CalendarDate(first.PlusDays(index), index, state, source, index - recorded, dates[index]);
+        }
+    }
+
+    private static (DayState State, string? Source) State(bool recorded, string? witness) => (recorded, witness) switch
+    {
+        (true, _) => (DayState.Recorded, "activities"),
+        (false, not null) => (DayState.Rest, $"inferred from {witness}"),
+        _ => (DayState.Unknown, null),
+    };
+
+    /// <summary>For every date the ordinally smallest source that recorded within the 7 days after it, or null.</summary>
+    private static string?[] Witnesses(List<ActivityOnDay>[] dates)
+    {
+        var witnesses = new string?[dates.Length];
+        for (var index = 0; index < dates.Length; index++)
+        {
+            foreach (var source in dates[index].SelectMany(activity => activity.Sources))
+            {
+                Testify(witnesses.AsSpan(Math.Max(0, index - SettledDaysBack)..index), source);
+            }
+        }
+
+        return witnesses;
+    }
+
+    private static void Testify(Span<string?> earlier, string source)
+    {
+        foreach (ref var witness in earlier)
+        {
+            witness = witness is null || string.CompareOrdinal(source, witness) < 0 ? source : witness;
+        }
+    }
+}

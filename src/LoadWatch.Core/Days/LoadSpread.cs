@@ -1,0 +1,28 @@
+// Monotony = mean / standard deviation of 7 daily loads; strain = load of the week x monotony.
+// Foster 1998, "Monitoring training in athletes with reference to overtraining syndrome".
+// Rest days count as 0. Departures: the paper does not say which standard deviation, here n - 1; equal loads have none, so no monotony;
+// one unknown day leaves both unknown.
+namespace LoadWatch.Days;
+
+/// <summary>How evenly the load of a week is spread.</summary>
+internal static class LoadSpread
+{
+    private const int Days = 7;
+
+    /// <summary>Of the last 7 loads, dimensionless; null unless all are known and they differ.</summary>
+    /// <param name="loads">Oldest first.</param>
+    public static double? Monotony(IReadOnlyList<double?> loads)
+    {
+        var week = loads.Skip(loads.Count - Days).OfType<double>().ToList();
+        if (week.Count < Days || week.Max() <= week.Min())
+        {
+            return null;
+        }
+
+        var mean = week.Average();
+        return Significant.Round(mean / Math.Sqrt(week.Sum(load => (load - mean) * (load - mean)) / (Days - 1)));
+    }
+
+    /// <summary>In the load's unit; null without monotony.</summary>
+    public static double? Strain(double? weekLoad, double? monotony) => Significant.Round(weekLoad * monotony);
+}

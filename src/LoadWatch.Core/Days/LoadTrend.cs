@@ -1,0 +1,74 @@
+// Acute and chronic load and their ratios.
+//   coupled    A / ((A + W1 + W2 + W3) / 4)    Lolli et al. 2019, "Mathematical coupling causes spurious correlation within the conventional
+//                                              acute-to-chronic workload ratio calculations"
+//   uncoupled  A / ((W1 + W2 + W3) / 3)        Windt and Gabbett 2018, "Is it all for naught? What does mathematical coupling mean for
+//                                              acute:chronic workload ratios?"
+//   weighted   E7 / E28                        Williams et al. 2017, "Better way to determine the acute:chronic workload ratio?"
+// A: load of the last 7 days, W1..W3: the weeks before, E: see WeightedAverage. Loads in the group's unit, ratios dimensionless.
+// Departures: a window with unknown days is scaled to its known ones, and is null where too few are known; over zero a ratio is null.
+namespace LoadWatch.Days;
+
+/// <summary>One person's load trends. Takes every date in order, oldest first.</summary>
+internal sealed class LoadTrend
+{
+    private const int KnownOf7 = 5;
+    private const int KnownOf21 = 17;
+    private const int KnownOf28 = 22;
+    private const int MedianDays = 365;
+
+    private readonly List<double?> loads = [];
+    private readonly List<double?> chronics = [];
+    private readonly RunningMedian chronicMedian = new();
+    private readonly WeightedAverage acuteAverage = new(7);
+    private readonly WeightedAverage chronicAverage = new(28);
+
+    /// <summary>The same day with its load trends.</summary>
+    public Day Add(Day day)
+    {
+        loads.Add(day.Load);
+        return WithMedian(WithSpread(WithAverages(WithWeeks(day))));
+    }
+
+    private Day WithWeeks(Day day)
+    {
+        var (week, month) = (LoadWindow.Of(loads, 0, 7), LoadWindow.Of(loads, 0, 28));
+        var acute = week.MeanWeek(KnownOf7);
+        var chronic = loads.Count >= 28 ? month.MeanWeek(KnownOf28) : null;
+        var before = chronic.HasValue ? LoadWindow.Of(loads, 7, 21).MeanWeek(KnownOf21) : null;
+        var lastWeek = LoadWindow.Of(loads, 7, 7).MeanWeek(KnownOf7);
+        return day with
+        {
+            Acute = acute,
+            Chronic = chronic,
+            ChronicBefore = before,
+            RatioCoupled = Ratio(acute, chronic),
+            RatioUncoupled = Ratio(acute, before),
+            WeeklyChange = Ratio(acute - lastWeek, lastWeek),
+            Coverage7 = week.Coverage,
+            Coverage28 = month.Coverage,
+        };
+    }
+
+    private Day WithAverages(Day day)
+    {
+        var (acute, chronic) = (acuteAverage.Add(day.Load), chronicAverage.Add(day.Load));
+        var covered = day.Acute.HasValue && day.Chronic.HasValue;
+        return day with { EwmaAcute = acute, EwmaChronic = chronic, RatioEwma = covered ? Ratio(acute, chronic) : null };
+    }
+
+    private Day WithSpread(Day day)
+    {
+        var monotony = LoadSpread.Monotony(loads);
+        return day with { Monotony = monotony, Strain = LoadSpread.Strain(day.Acute, monotony) };
+    }
+
+    private Day WithMedian(Day day)
+    {
+        chronics.Add(day.Chronic);
+        chronicMedian.Add(day.Chronic);
+        chronicMedian.Remove(chronics.Count > MedianDays ? chronics[^(MedianDays + 1)] : null);
+        return day with { ChronicMedian = chronicMedian.Value };
+    }
+
+    private static double? Ratio(double? value, double? over) => over is null or 0 ? null : Significant.Round(value / over);
+}

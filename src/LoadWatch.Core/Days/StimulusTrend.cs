@@ -1,0 +1,70 @@
+using LoadWatch.Stimulus;
+
+namespace LoadWatch.Days;
+
+/// <summary>
+/// One body region's days of a person. Takes every date in order, oldest first. The region counts as covered from the first date on which some channel
+/// could see hard work of it: before that, nothing is known of it, not even on a rest day.
+/// </summary>
+internal sealed class StimulusTrend(BodyRegion region)
+{
+    private const int UsualDays = 365;
+    private const int GapsWanted = 4;
+
+    private readonly List<bool?> judged = [];
+    private readonly List<int> heavyDays = [];
+    private readonly RunningMedian gaps = new();
+    private int oldestHeavy;
+    private int knownDaysSince;
+
+    public BodyRegion Region => region;
+
+    public RegionDay Add(CalendarDate date)
+    {
+        if (judged.Count == 0 && !HeavyOrFast.IsSeen(date, region))
+        {
+            return RegionDay.NotCovered;
+        }
+
+        judged.Add(HeavyOrFast.Judge(date, region));
+        Count();
+        ForgetOldGaps();
+        var usual = gaps.Count >= GapsWanted ? gaps.Value : null;
+        return new RegionDay(judged[^1], HeavyAmong(7), HeavyAmong(28), Today - LastHeavy, knownDaysSince, usual);
+    }
+
+    private int Today => judged.Count - 1;
+
+    /// <summary>The first covered day stands in where there was no heavy-or-fast day yet.</summary>
+    private int LastHeavy => heavyDays.Count == 0 ? 0 : heavyDays[^1];
+
+    private void Count()
+    {
+        if (judged[^1] is true)
+        {
+            gaps.Add(heavyDays.Count == 0 ? null : Today - LastHeavy);
+            heavyDays.Add(Today);
+            knownDaysSince = 0;
+        }
+        else if (judged[^1] is false && Today > 0)
+        {
+            knownDaysSince++;
+        }
+    }
+
+    /// <summary>A gap counts while both of its heavy-or-fast days are among the last 365.</summary>
+    private void ForgetOldGaps()
+    {
+        while (oldestHeavy < heavyDays.Count && heavyDays[oldestHeavy] <= Today - UsualDays)
+        {
+            gaps.Remove(oldestHeavy + 1 < heavyDays.Count ? heavyDays[oldestHeavy + 1] - heavyDays[oldestHeavy] : null);
+            oldestHeavy++;
+        }
+    }
+
+    private int? HeavyAmong(int days)
+    {
+        var known = judged.Skip(judged.Count - days).OfType<bool>().ToList();
+        return known.Count == 0 ? null : known.Count(heavy => heavy);
+    }
+}

@@ -1,0 +1,66 @@
+using System.Globalization;
+using LoadWatch.Days;
+using LoadWatch.People;
+using NodaTime;
+
+namespace LoadWatch.Findings;
+
+/// <summary>
+/// No recording for longer than the person's own rhythm lets expect. The only rule that unknown days raise (I-6); the next recording ends it.
+/// </summary>
+public sealed class SilenceRule : IRule
+{
+    public string Name => "silence";
+
+    public IEnumerable<Finding> Evaluate(Person person, IReadOnlyList<Day> days, RuleLimits limits)
+    {
+        var recorded = new List<LocalDate>();
+        RecordingRhythm? rhythm = null;
+        foreach (var day in days)
+        {
+            if (day.State == DayState.Recorded)
+            {
+                recorded.Add(day.Date);
+                rhythm = RecordingRhythm.Of(recorded, limits.Silence);
+            }
+            else if (rhythm is not null && day.DaysSinceRecorded > rhythm.LimitDays)
+            {
+                yield return Find(person, day, rhythm, limits.Silence);
+            }
+        }
+    }
+
+    private Finding Find(Person person, Day day, RecordingRhythm rhythm, SilenceLimits limits) => new(
+        person.Id,
+        day.Date,
+        Name,
+        Region: null,
+        Severity.Notice,
+        rhythm.LastRecorded.PlusDays(rhythm.LimitDays + 1),
+        day.DaysSinceRecorded!.Value,
+        rhythm.LimitDays,
+        "days",
+        Sentence(day, rhythm),
+        Basis(day, rhythm, limits));
+
+    private static string Sentence(Day day, RecordingRhythm rhythm)
+    {
+        var usual = rhythm.UsualGapDays == 1 ? "usually one every day" : $"usually one at least every {Wording.Days(rhythm.UsualGapDays)}";
+        return $"No recording for {Wording.Days(day.DaysSinceRecorded!.Value)}; {usual}.";
+    }
+
+    private static Evidence Basis(Day day, RecordingRhythm rhythm, SilenceLimits limits) => new(
+        "days since the last recorded day, against a quantile of the gaps between recorded days before it (nearest rank upward) + extra days, at most the ceiling",
+        "a choice",
+        [
+            new("days_since_recorded", day.DaysSinceRecorded, "days", $"last on {rhythm.LastRecorded.ToString("uuuu-MM-dd", CultureInfo.InvariantCulture)}"),
+            new("usual_gap", rhythm.UsualGapDays, "days", "the quantile of the gaps"),
+            new("gaps", rhythm.Gaps, "count"),
+            new("limit", rhythm.LimitDays, "days"),
+            new("gap_quantile", limits.GapQuantile, "share"),
+            new("extra", limits.ExtraDays, "days"),
+            new("ceiling", limits.CeilingDays, "days"),
+            new("look_back", limits.LookBackDays, "days"),
+            new("gaps_wanted", limits.GapsWanted, "count"),
+        ]);
+}

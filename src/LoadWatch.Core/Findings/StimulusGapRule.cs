@@ -1,0 +1,104 @@
+// Days without heavy or fast work of a body region, against limits by age. All limits are a choice; what counts as heavy or fast: HeavyOrFast.
+using System.Globalization;
+using LoadWatch.Days;
+using LoadWatch.People;
+using LoadWatch.Stimulus;
+using NodaTime;
+
+namespace LoadWatch.Findings;
+
+/// <summary>
+/// Too long without heavy or fast work of a region, legs first. Only a heavy-or-fast day ends it. A day on which nothing is known, or a gap that is known
+/// too sparsely, neither raises nor worsens nor clears it: the last known state stands (I-6).
+/// </summary>
+public sealed class StimulusGapRule : IRule
+{
+    private static readonly BodyRegion[] Regions = [BodyRegion.Legs];
+
+    public string Name => "stimulus_gap";
+
+    public IEnumerable<Finding> Evaluate(Person person, IReadOnlyList<Day> days, RuleLimits limits) =>
+        Regions.SelectMany(region => Evaluate(person, region, days, limits.StimulusGap)).OrderBy(finding => finding.Date);
+
+    private IEnumerable<Finding> Evaluate(Person person, BodyRegion region, IReadOnlyList<Day> days, StimulusGapLimits limits)
+    {
+        LocalDate? since = null;
+        Gap? read = null;
+        for (var index = 0; index < days.Count; index++)
+        {
+            if (Read(person, region, days, index, limits) is { } gap)
+            {
+                read = gap;
+                since = gap.Days == 0 ? null : since ?? (gap.Days >= gap.Limit.NoticeDays ? gap.Date : null);
+            }
+
+            if (since is { } start && read is not null)
+            {
+                yield return Find(person, days[index].Date, region, start, read, limits);
+            }
+        }
+    }
+
+    /// <summary>The gap as the date shows it; null where too little is known. A heavy-or-fast day is always known.</summary>
+    private static Gap? Read(Person person, BodyRegion region, IReadOnlyList<Day> days, int index, StimulusGapLimits limits)
+    {
+        var day = days[index];
+        var known = day.Regions.GetValueOrDefault(region, RegionDay.NotCovered);
+        if (known.HeavyOrFast is null || known.DaysSince is not { } gap || known.KnownDaysSince < Significant.Round(limits.CoveredShare * gap))
+        {
+            return null;
+        }
+
+        var age = person.AgeOn(day.Date);
+        var never = gap <= index && days[index - gap].Regions.GetValueOrDefault(region)?.HeavyOrFast is not true;
+        return new Gap(day.Date, known.HeavyOrFast is true ? 0 : gap, known, age, StimulusGapLimit.For(age, known, limits), never);
+    }
+
+    private Finding Find(Person person, LocalDate date, BodyRegion region, LocalDate since, Gap gap, StimulusGapLimits limits)
+    {
+        var severity = gap.Limit.SeverityOf(gap.Days);
+        var limit = gap.Limit.Of(severity);
+        return new(person.Id, date, Name, region, severity, since, gap.Days, limit, "days", Sentence(date, region, gap), Basis(gap, limits));
+    }
+
+    private static string Sentence(LocalDate date, BodyRegion region, Gap gap)
+    {
+        var until = gap.Date == date ? "" : $" up to {Wording.Date(gap.Date, date)}, not known since";
+        var first = Wording.Date(gap.Date.PlusDays(-gap.Days), date);
+        var last = gap.Never ? $"none since it can be seen, from {first}" : $"last on {first}";
+        return $"No heavy or fast {Work(region)} for {Wording.Days(gap.Days)}{until}{Remarks(gap)}; {last}.";
+    }
+
+    private static string Remarks(Gap gap)
+    {
+        var usual = gap.Region.UsualGapDays is { } days ? $"usual gap {Wording.Days(days)}" : null;
+        var known = gap.Region.KnownDaysSince < gap.Days ? $"{gap.Region.KnownDaysSince} of them known" : null;
+        var remarks = string.Join("; ", new[] { usual, known }.OfType<string>());
+        return remarks.Length == 0 ? "" : $" ({remarks})";
+    }
+
+    private static string Work(BodyRegion region) => region switch
+    {
+        BodyRegion.Legs => "leg work",
+        BodyRegion.Trunk => "trunk work",
+        _ => "arm work",
+    };
+
+    private static Evidence Basis(Gap gap, StimulusGapLimits limits) => new(
+        "days since the last heavy-or-fast day (3 hard bouts, or 6 hard repetitions in 2 sets; hard: relative drive of 0.70 or more), against a limit by age",
+        "a choice",
+        [
+            new("days_since", gap.Days, "days", $"on {gap.Date.ToString("uuuu-MM-dd", CultureInfo.InvariantCulture)}"),
+            new("known_days_since", gap.Region.KnownDaysSince, "days"),
+            new("heavy_or_fast_days_28", gap.Region.Days28, "days"),
+            new("usual_gap", gap.Region.UsualGapDays, "days", "median over the last 365 days"),
+            new("age", gap.Age, "years", gap.Age is null ? "unknown, taken as the younger" : null),
+            new("notice", gap.Limit.NoticeDays, "days"),
+            new("warning", gap.Limit.WarningDays, "days"),
+            new("older_from", limits.OlderFrom, "years"),
+            new("known_share_wanted", limits.CoveredShare, "share"),
+        ]);
+
+    /// <summary>A region's gap as read on a date.</summary>
+    private sealed record Gap(LocalDate Date, int Days, RegionDay Region, int? Age, StimulusGapLimit Limit, bool Never);
+}

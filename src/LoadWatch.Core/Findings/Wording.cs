@@ -1,0 +1,27 @@
+using System.Globalization;
+using NodaTime;
+
+namespace LoadWatch.Findings;
+
+/// <summary>Numbers and dates as the sentences of findings show them, rounded for reading.</summary>
+internal static class Wording
+{
+    /// <summary><c>2 March</c>, with the year where it is not the year of <paramref name="told"/>.</summary>
+    public static string Date(LocalDate date, LocalDate told) =>
+        date.ToString(date.Year == told.Year ? "d MMMM" : "d MMMM uuuu", CultureInfo.InvariantCulture);
+
+    /// <summary><c>1 day</c>, <c>3.5 days</c>.</summary>
+    public static string Days(double days) => days == 1 ? "1 day" : $"{Number(days)} days";
+
+    /// <summary>Whole from 10 up, one decimal below.</summary>
+    public static string Number(double value) => value.ToString(Math.Abs(value) >= 10 ? "0" : "0.#", CultureInfo.InvariantCulture);
+
+    /// <summary>One decimal, or two where one would hide the difference from the limit.</summary>
+    public static string Ratio(double value, double limit)
+    {
+        var hidden = value != limit && Limit(Math.Round(value, 1)) == Limit(limit);
+        return value >= 10 ? Number(value) : value.ToString(hidden ? "0.00" : "0.0", CultureInfo.InvariantCulture);
+    }
+
+    public static string Limit(double limit) => limit.ToString("0.0#", CultureInfo.InvariantCulture);
+}

@@ -1,0 +1,189 @@
+using CsCheck;
+using LoadWatch.Alerts;
+using LoadWatch.Findings;
+using LoadWatch.Stimulus;
+using NodaTime;
+using static LoadWatch.Tests.Days.Training;
+
+namespace LoadWatch.Tests.Alerts;
+
+public class AlertReviewTests
+{
+    private static readonly FindingKey Legs = new("anna", "stimulus_gap", BodyRegion.Legs);
+
+    private static readonly FindingKey Load = new("anna", "load_ratio", null);
+
+    [Fact]
+    public void AFindingWithoutAnAlertRaisesOneOnTheEvaluationDate()
+    {
+        var result = Review(5, [], Find(Legs, 5, since: 2));
+
+        var alert = Assert.Single(result.Alerts);
+        Assert.Equal(new Alert(Legs, On(5), On(5), AlertState.Unacknowledged, Severity.Notice, "stimulus_gap on 5"), alert);
+        Assert.Equal("anna|stimulus_gap|legs|2026-01-10", alert.Id);
+        AssertChange(result, 1, AlertState.Normal, AlertState.Unacknowledged, AlertChangeReason.Raised);
+        Assert.NotNull(result.Changes[0].Evidence);
+    }
+
+    [Theory]
+    [InlineData(AlertState.Unacknowledged)]
+    [InlineData(AlertState.Acknowledged)]
+    public void AFindingThatStillHoldsMovesTheDateAndRefreshesTheText(AlertState state)
+    {
+        var result = Review(6, [Alert(state)], Find(Legs, 6));
+
+        Assert.Equal(Alert(state) with { Judged = On(6), Text = "stimulus_gap on 6" }, Assert.Single(result.Alerts));
+        Assert.Empty(result.Changes);
+    }
+
+    [Theory]
+    [InlineData(AlertState.Unacknowledged)]
+    [InlineData(AlertState.Acknowledged)]
+    public void ARiseInSeverityIsAChangeAndAsksToBeAcknowledged(AlertState state)
+    {
+        var result = Review(6, [Alert(state)], Find(Legs, 6, severity: Severity.Warning));
+
+        AssertChange(result, 4, state, AlertState.Unacknowledged, AlertChangeReason.SeverityRose);
+        Assert.Equal(Severity.Warning, result.Changes[0].Severity);
+        Assert.Equal(Severity.Warning, result.Alerts[0].Severity);
+    }
+
+    [Fact]
+    public void AFallInSeverityLeavesItAcknowledged()
+    {
+        var result = Review(6, [Alert(AlertState.Acknowledged) with { Severity = Severity.Warning }], Find(Legs, 6));
+
+        AssertChange(result, 4, AlertState.Acknowledged, AlertState.Acknowledged, AlertChangeReason.SeverityFell);
+        Assert.Equal(Severity.Notice, result.Alerts[0].Severity);
+    }
+
+    [Theory]
+    [InlineData(AlertState.Unacknowledged, AlertState.Returned)]
+    [InlineData(AlertState.Acknowledged, AlertState.Normal)]
+    public void WithoutItsFindingAnAlertReturns(AlertState from, AlertState to)
+    {
+        var result = Review(6, [Alert(from)]);
+
+        AssertChange(result, 4, from, to, AlertChangeReason.ReturnedToNormal);
+        Assert.Equal(Alert(from) with { State = to }, result.Alerts[0]);
+        Assert.Null(result.Changes[0].Evidence);
+    }
+
+    /// <summary>I-14.</summary>
+    [Theory]
+    [InlineData(AlertState.Unacknowledged, AlertState.Returned)]
+    [InlineData(AlertState.Acknowledged, AlertState.Normal)]
+    public void WhatDidNotEvenHoldWhenItWasJudgedIsCorrected(AlertState from, AlertState to)
+    {
+        LocalDate? asked = null;
+        var result = AlertReview.Review("anna", On(6), [Alert(from)], _ => 3, [], (_, date) =>
+        {
+            asked = date;
+            return false;
+        });
+
+        AssertChange(result, 4, from, to, AlertChangeReason.Corrected);
+        Assert.Equal(On(5), asked);
+    }
+
+    [Fact]
+    public void ALateFileOnTheVeryDateOfTheReviewIsACorrection() =>
+        AssertChange(Review(5, [Alert(AlertState.Unacknowledged)]), 4, AlertState.Unacknowledged, AlertState.Returned, AlertChangeReason.Corrected);
+
+    [Fact]
+    public void AReturnedAlertIsRaisedAgainByTheNextFinding()
+    {
+        var result = Review(9, [Alert(AlertState.Returned)], Find(Legs, 9, severity: Severity.Warning));
+
+        AssertChange(result, 4, AlertState.Returned, AlertState.Unacknowledged, AlertChangeReason.RaisedAgain);
+        Assert.Equal((On(5), On(9), Severity.Warning), (result.Alerts[0].Raised, result.Alerts[0].Judged, result.Alerts[0].Severity));
+    }
+
+    [Fact]
+    public void AReturnedAlertWithoutFindingWaitsToBeAcknowledged()
+    {
+        var result = Review(9, [Alert(AlertState.Returned)]);
+
+        Assert.Equal([Alert(AlertState.Returned)], result.Alerts);
+        Assert.Empty(result.Changes);
+    }
+
+    [Theory]
+    [InlineData(AlertState.Unacknowledged, AlertState.Acknowledged)]
+    [InlineData(AlertState.Returned, AlertState.Normal)]
+    public void Acknowledging(AlertState from, AlertState to)
+    {
+        var result = AlertReview.Acknowledge(Alert(from), On(7), _ => 3);
+
+        AssertChange(result, 4, from, to, AlertChangeReason.Acknowledged);
+        Assert.Empty(AlertReview.Acknowledge(result.Alerts[0], On(7), _ => 4).Changes);
+    }
+
+    [Fact]
+    public void EachKeyHasItsOwnAlert()
+    {
+        var result = Review(6, [Alert(AlertState.Acknowledged)], Find(Load, 6));
+
+        Assert.Equal([(Load, AlertState.Unacknowledged), (Legs, AlertState.Normal)], result.Alerts.Select(alert => (alert.Key, alert.State)));
+        Assert.Equal([AlertChangeReason.Raised, AlertChangeReason.ReturnedToNormal], result.Changes.Select(change => change.Reason));
+    }
+
+    [Fact]
+    public void OtherPeopleAndOtherDatesArePassedOver()
+    {
+        var result = Review(6, [], Find(Legs, 5), Find(Legs with { Person = "ben" }, 6));
+
+        Assert.Empty(result.Alerts);
+    }
+
+    [Fact]
+    public void AnAlertJudgedOnALaterDateIsLeftAlone()
+    {
+        var result = Review(4, [Alert(AlertState.Unacknowledged)]);
+
+        Assert.Equal([Alert(AlertState.Unacknowledged)], result.Alerts);
+        Assert.Empty(result.Changes);
+    }
+
+    [Fact]
+    public void WhatIsRaisedOnceMoreOnTheSameDateGoesOnInTheSameHistory()
+    {
+        var result = AlertReview.Review("anna", On(5), [], _ => 3, [Find(Legs, 5)], (_, _) => true);
+
+        AssertChange(result, 4, AlertState.Normal, AlertState.Unacknowledged, AlertChangeReason.Raised);
+    }
+
+    /// <summary>Any state, any findings of the date: the second review finds nothing to change.</summary>
+    [Fact]
+    public void TheSameReviewTwiceChangesNothing() => Gen.Select(
+        Gen.Enum<AlertState>(),
+        Gen.Enum<Severity>(),
+        Gen.Enum<Severity>(),
+        Gen.Int[0, 2],
+        Gen.Bool,
+        Gen.Bool).Sample((state, before, now, later, found, held) =>
+    {
+        Finding[] findings = found ? [Find(Legs, 5 + later, severity: now), Find(Load, 5 + later)] : [];
+        Alert[] current = [Alert(state) with { Severity = before }];
+        var first = AlertReview.Review("anna", On(5 + later), current, _ => 3, findings, (_, _) => held);
+        var second = AlertReview.Review("anna", On(5 + later), first.Alerts, _ => 4, findings, (_, _) => held);
+
+        Assert.Empty(second.Changes);
+        Assert.Equal(first.Alerts.Where(alert => alert.State != AlertState.Normal), second.Alerts);
+    });
+
+    private static AlertReviewResult Review(int day, Alert[] current, params Finding[] findings) =>
+        AlertReview.Review("anna", On(day), current, id => current.Any(alert => alert.Id == id) ? 3 : 0, findings, (_, _) => true);
+
+    private static Alert Alert(AlertState state) => new(Legs, On(5), On(5), state, Severity.Notice, "as told");
+
+    private static Finding Find(FindingKey key, int day, int? since = null, Severity severity = Severity.Notice) => new(
+        key.Person, On(day), key.Rule, key.Region, severity, On(since ?? day), 10, 10, "days", $"{key.Rule} on {day}", new Evidence("f", "a choice", []));
+
+    private static void AssertChange(AlertReviewResult result, int sequence, AlertState from, AlertState to, AlertChangeReason reason)
+    {
+        var change = Assert.Single(result.Changes);
+        Assert.Equal((sequence, from, to, reason), (change.Sequence, change.From, change.To, change.Reason));
+        Assert.Equal((result.Alerts[0].Id, result.Alerts[0].State), (change.AlertId, to));
+    }
+}

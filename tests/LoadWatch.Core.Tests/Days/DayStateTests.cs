@@ -1,0 +1,77 @@
+using LoadWatch.Days;
+using static LoadWatch.Tests.Days.Training;
+
+namespace LoadWatch.Tests.Days;
+
+/// <summary>I-6: the state of every date.</summary>
+public class DayStateTests
+{
+    [Fact]
+    public void ThreeDaysAWeekNeedNoConfirmedRest()
+    {
+        int[] trained = [0, 2, 4, 7, 9, 11, 14, 16, 18];
+        var days = Build(18, [.. trained.Select(day => Activity(day))]);
+
+        Assert.All(days, (day, index) => Assert.Equal(trained.Contains(index) ? DayState.Recorded : DayState.Rest, day.State));
+        Assert.Equal("activities", days[0].StateSource);
+        Assert.Equal("inferred from watch", days[1].StateSource);
+        Assert.Equal(0, days[1].Load);
+        Assert.Equal(300, days[18].Acute);
+    }
+
+    [Fact]
+    public void TheOpenTailIsUnknown()
+    {
+        var days = Build(5, Activity(0), Activity(2));
+
+        Assert.Equal([DayState.Recorded, DayState.Rest, DayState.Recorded, DayState.Unknown, DayState.Unknown, DayState.Unknown], days.Select(day => day.State));
+        Assert.All(days.Skip(3), day => Assert.Null(day.Load));
+        Assert.All(days.Skip(3), day => Assert.Null(day.StateSource));
+        Assert.Equal([0, 1, 0, 1, 2, 3], days.Select(day => day.DaysSinceRecorded));
+    }
+
+    [Fact]
+    public void OfAHoleOfTenDaysTheLastSevenAreRest()
+    {
+        var days = Build(11, Activity(0), Activity(11));
+
+        Assert.All(days.Skip(1).Take(3), day => Assert.Equal(DayState.Unknown, day.State));
+        Assert.All(days.Skip(4).Take(7), day => Assert.Equal(DayState.Rest, day.State));
+    }
+
+    [Fact]
+    public void AHoleOfSevenDaysIsRestAndOneOfEightBeginsUnknown()
+    {
+        Assert.DoesNotContain(Build(8, Activity(0), Activity(8)), day => day.State == DayState.Unknown);
+        Assert.Equal(Monday.PlusDays(1), Assert.Single(Build(9, Activity(0), Activity(9)), day => day.State == DayState.Unknown).Date);
+    }
+
+    [Fact]
+    public void ADayThatTheOtherDeviceRecordedIsNoRest()
+    {
+        var days = Build(4, Activity(0, source: "watch"), Activity(2, 60, "bike"), Activity(4, source: "watch"));
+
+        Assert.Equal(DayState.Recorded, days[2].State);
+        Assert.Equal(60, days[2].Load);
+    }
+
+    [Fact]
+    public void TheOrdinallySmallestSourceIsNamed()
+    {
+        var days = Build(6, Activity(0, source: "watch"), Activity(4, source: "watch"), Activity(6, source: "bike"));
+
+        Assert.Equal("inferred from bike", days[2].StateSource);
+        Assert.Equal("inferred from bike", days[5].StateSource);
+        Assert.Equal("inferred from watch", Build(5, Activity(0, source: "watch"), Activity(4, source: "watch"))[2].StateSource);
+    }
+
+    [Fact]
+    public void EachDeviceSpeaksForSevenDaysOnly()
+    {
+        var days = Build(12, Activity(0, source: "bike"), Activity(3, source: "watch"), Activity(12, source: "bike"));
+
+        Assert.Equal("inferred from watch", days[2].StateSource);
+        Assert.Equal(DayState.Unknown, days[4].State);
+        Assert.Equal("inferred from bike", days[5].StateSource);
+    }
+}

@@ -1,0 +1,48 @@
+using LoadWatch.Days;
+using LoadWatch.Findings;
+using LoadWatch.Stimulus;
+using LoadWatch.Tests.Days;
+
+namespace LoadWatch.Tests.Findings;
+
+/// <summary>Builds single days as rules read them; day 0 is Monday, 5 January 2026.</summary>
+internal static class Watched
+{
+    public static readonly RuleLimits Defaults = new();
+
+    /// <summary>A day on which every condition of the load ratio but the ratio itself is met; null is a day of unknown load.</summary>
+    public static Day Ratio(int day, double? ratio) => new()
+    {
+        Person = "anna",
+        Date = Training.On(day),
+        State = ratio is null ? DayState.Unknown : DayState.Recorded,
+        Acute = ratio * 200,
+        Chronic = ratio is null ? null : 250,
+        ChronicBefore = ratio is null ? null : 200,
+        ChronicMedian = 250,
+        RatioUncoupled = ratio,
+        Coverage7 = 1,
+        Coverage28 = 1,
+        DaysSinceFirstCovered = 100,
+        DaysSinceRecorded = 0,
+    };
+
+    public static List<Day> Ratios(params double?[] ratios) => ratios.Select((ratio, day) => Ratio(day, ratio)).ToList();
+
+    public static Day Gap(int day, int gap, int? known = null, bool seen = true, double? usual = null) => new()
+    {
+        Person = "anna",
+        Date = Training.On(day),
+        State = seen ? DayState.Recorded : DayState.Unknown,
+        Regions = new Dictionary<BodyRegion, RegionDay>
+        {
+            [BodyRegion.Legs] = new(seen ? gap == 0 : null, 0, 0, gap, known ?? gap, usual),
+        },
+    };
+
+    /// <summary>A heavy day, then known days without heavy or fast work up to the gap.</summary>
+    public static List<Day> GapOf(int days, double? usual = null) => Enumerable.Range(0, days + 1).Select(day => Gap(day, day, usual: usual)).ToList();
+
+    public static List<Finding> Of(this IRule rule, IReadOnlyList<Day> days, int? birthYear = 1990, RuleLimits? limits = null) =>
+        rule.Evaluate(Training.Anna with { BirthYear = birthYear }, days, limits ?? Defaults).ToList();
+}
