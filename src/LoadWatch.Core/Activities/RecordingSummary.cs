@@ -11,7 +11,7 @@ namespace LoadWatch.Activities;
 /// <param name="Source">The device or layout that wrote it (I-6): <c>device 255/7/1234</c>, <c>layout own_samples</c>.</param>
 /// <param name="Channels">Number of channels that hold readings.</param>
 /// <param name="Samples">Number of samples.</param>
-/// <param name="SamplesDigest">Equal for equal samples.</param>
+/// <param name="SamplesDigest">Equal for equal samples, beats of their own and sets (<see cref="Activities.SamplesDigest"/>).</param>
 public sealed record RecordingSummary(
     string Sha,
     int Part,

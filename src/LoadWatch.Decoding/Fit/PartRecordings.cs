@@ -46,7 +46,7 @@ internal sealed class PartRecordings
     {
         Part = 0,
         Sport = session.Sport,
-        Start = session.Start is null ? samples.First : content.Clock.Instant(session.Start),
+        Start = content.Clock.Instant(session.Start) ?? samples.First,
         LocalOffset = content.LocalOffsetSeconds is { } seconds ? Offset.FromSeconds(seconds) : null,
         ElapsedSeconds = session.ElapsedSeconds ?? (samples.Last - samples.First)?.TotalSeconds,
         TimerSeconds = session.TimerSeconds,

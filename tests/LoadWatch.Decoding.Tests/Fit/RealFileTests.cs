@@ -25,6 +25,7 @@ public class RealFileTests
         var decoded = FitDecoder.Decode(RealFiles.Bytes(name));
         Assert.Empty(decoded.Problems);
         Assert.Equal(expected.FileType, decoded.FileType);
+        Assert.Equal(expected.Sports, decoded.Recordings.Select(recording => Plain(recording.Sport)).Distinct());
         Assert.Equal(expected.Int("records"), decoded.Recordings.Sum(recording => recording.Samples.Count));
         Assert.Equal(expected.Int("sessions"), decoded.Recordings.Count);
         Assert.Equal(expected.Int("sets"), decoded.Recordings.Sum(recording => recording.Sets.Count));
@@ -55,6 +56,38 @@ public class RealFileTests
         Assert.Equal(expected.Number("session_elapsed_s")!.Value, decoded.Recordings.Sum(recording => recording.ElapsedSeconds ?? 0), 1.0);
         Assert.Equal(expected.Number("session_timer_s")!.Value, decoded.Recordings.Sum(recording => recording.TimerSeconds ?? 0), 1.0);
     }
+
+    [Theory]
+    [InlineData("r004.fit", 0, "byte 768: cut short")]
+    [InlineData("r005.fit", 1, "byte 771: 83 bytes behind the last whole part")]
+    [InlineData("r012.fit", 0, "byte 253838: wrong checksum")]
+    [InlineData("r013.fit", 0, "byte 769: wrong checksum")]
+    [InlineData("r019.fit", 1, "byte 1540: wrong checksum")]
+    [InlineData("r020.fit", 1, "byte 786: cut short")]
+    [InlineData("r021.fit", 0, "byte 403454: wrong checksum")]
+    [InlineData("r023.fit", 0, "byte 78233: cut short")]
+    public void DamagedFilesKeepTheirWholePartsAndNameThePlace(string name, int recordings, string problem)
+    {
+        RealFiles.Get(name);
+        var decoded = FitDecoder.Decode(RealFiles.Bytes(name));
+        Assert.Equal(recordings, decoded.Recordings.Count);
+        Assert.StartsWith(problem, Assert.Single(decoded.Problems).ToString(), StringComparison.Ordinal);
+        Assert.Equal(FitCompleteness.Suspect, FitDecoder.CheckCompleteness(RealFiles.Bytes(name)));
+    }
+
+    [Theory]
+    [InlineData("r037.fit")]
+    [InlineData("r051.fit")]
+    public void FilesThatCountUptimeHaveNoDates(string name)
+    {
+        RealFiles.Get(name);
+        var recording = Assert.Single(FitDecoder.Decode(RealFiles.Bytes(name)).Recordings);
+        Assert.Null(recording.Start);
+        Assert.Null(recording.Samples.First);
+        Assert.NotEqual(0, recording.Samples.Count);
+    }
+
+    private static string Plain(Sport sport) => sport.ToString().Replace("_", "", StringComparison.Ordinal);
 
     private static void Close(Instant? expected, Instant? actual)
     {

@@ -61,6 +61,9 @@ internal sealed class RealFile(Dictionary<string, string> row)
 
     public string FileType => row["file_type"];
 
+    /// <summary>Sports in the order of their sessions, each once, in lower case without separators: <c>swimming/openwater</c>.</summary>
+    public IEnumerable<string> Sports => row["sport"].Split('|', StringSplitOptions.RemoveEmptyEntries).Select(sport => sport.ToLowerInvariant());
+
     public bool IsReference => row["reference"] == "reads it";
 
     public Instant? FirstRecord => InstantOf("first_record");

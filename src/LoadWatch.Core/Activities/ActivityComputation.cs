@@ -1,0 +1,58 @@
+using System.Globalization;
+using LoadWatch.Loads;
+using LoadWatch.People;
+using LoadWatch.Recordings;
+using LoadWatch.Stimulus;
+using NodaTime;
+
+namespace LoadWatch.Activities;
+
+/// <summary>From one recording to everything that it says: quality cuts, histograms, loads, times in zone, stimulus. Pure.</summary>
+public static class ActivityComputation
+{
+    /// <summary>Anchors are taken as they hold on the recording's local date.</summary>
+    /// <exception cref="ArgumentException">The recording carries no date.</exception>
+    public static ActivityValues Compute(Recording recording, Person person, AnchorBook anchors, ComputationSettings settings)
+    {
+        var date = LocalStart.Of(recording, person).Date;
+        var usable = new UsableRecording(recording, settings.UsableShareWanted);
+        var loads = ActivityLoads.Of(usable, date, person, anchors, settings);
+        var stimulus = SessionStimulus.Of(usable, date, person, anchors, settings);
+        return new ActivityValues
+        {
+            HeartRateMeanBpm = Mean(usable[Channel.HeartRate]),
+            HeartRateMaxBpm = (int?)Largest(usable[Channel.HeartRate]),
+            PowerMeanWatts = Mean(usable[Channel.Power]),
+            PowerMaxWatts = Significant.Round(Largest(usable[Channel.Power])),
+            UsableShare = usable.Channels.Values.ToDictionary(channel => channel.Channel, channel => Significant.Round(channel.Share)),
+            Histograms = usable.Histograms,
+            TimesInZone = loads.TimesInZone,
+            Quantities = loads.Quantities,
+            Stimulus = stimulus.Regions,
+            Remarks = [.. usable.TooLittle.Select(TooLittle), .. loads.Remarks, .. stimulus.Remarks],
+        };
+    }
+
+    /// <summary>Weighted by time; the plain mean where the readings stand for no time.</summary>
+    private static double? Mean(UsableChannel? channel)
+    {
+        if (channel is null)
+        {
+            return null;
+        }
+
+        var milliseconds = channel.Samples.Sum(sample => (long)sample.Milliseconds);
+        return Significant.Round(milliseconds == 0
+            ? channel.Samples.Average(sample => sample.Value)
+            : channel.Samples.Sum(sample => sample.Value * sample.Milliseconds) / milliseconds);
+    }
+
+    private static double? Largest(UsableChannel? channel) => channel?.Samples.Max(sample => sample.Value);
+
+    private static string TooLittle(UsableChannel channel)
+    {
+        var words = ChannelWords.Of(channel.Channel);
+        var percent = (channel.Share * 100).ToString("0", CultureInfo.InvariantCulture);
+        return $"{words} usable in {percent} % of the time: no load, zone or stimulus from {words}";
+    }
+}

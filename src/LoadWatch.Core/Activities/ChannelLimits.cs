@@ -1,0 +1,21 @@
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Activities;
+
+/// <summary>
+/// Which readings can be true at all, by channel. Wide on purpose: they cut sensor codes and nonsense, not hard work. Common practice, no published source.
+/// </summary>
+public static class ChannelLimits
+{
+    /// <summary>
+    /// Heart rate 25 to 250 bpm (so 0, a lost contact, and 254, a code for none, are out); power 0 to 3000 W; speed 0 to 45 m/s; every other
+    /// channel as recorded. Never true for NaN or infinity.
+    /// </summary>
+    public static bool Usable(Channel channel, double value) => channel switch
+    {
+        Channel.HeartRate => value is >= 25 and <= 250,
+        Channel.Power => value is >= 0 and <= 3000,
+        Channel.Speed => value is >= 0 and <= 45,
+        _ => double.IsFinite(value),
+    };
+}

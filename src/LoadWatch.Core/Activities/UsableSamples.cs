@@ -1,0 +1,112 @@
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Activities;
+
+/// <summary>
+/// Cuts a channel down to what can be used. Rows are sorted by time, rows of one time keep the order of the file, undated rows are left out.
+/// A reading stands for the time to the next usable one of its channel, at most 10 s; the last stands for 0. Pauses need no rule of their own:
+/// whatever lies beyond those 10 s counts for nothing.
+/// </summary>
+public static class UsableSamples
+{
+    /// <summary>The longest time that one reading may stand for, milliseconds. A choice: it bridges sparse recording, not a stop.</summary>
+    public const int LongestMilliseconds = 10_000;
+
+    /// <summary>The channels with a reading, heart rate also where beats came only in messages of their own.</summary>
+    public static IEnumerable<Channel> ChannelsOf(Recording recording) =>
+        Enum.GetValues<Channel>().Where(channel =>
+            recording.Samples.Has(channel) || (channel == Channel.HeartRate && recording.LateHeartRates.Count > 0));
+
+    public static UsableChannel Of(Recording recording, Channel channel)
+    {
+        var rows = DatedRows(recording.Samples, channel);
+        if (channel == Channel.HeartRate && recording.LateHeartRates.Count > 0)
+        {
+            rows.AddRange(LateRows(recording.LateHeartRates, rows));
+        }
+
+        SortByTime(rows);
+        var usable = rows.FindAll(row => ChannelLimits.Usable(channel, row.Value));
+        return new UsableChannel(channel, WithDurations(usable), Share(usable, rows));
+    }
+
+    private static List<Row> DatedRows(SampleSeries series, Channel channel)
+    {
+        var times = series.UnixMilliseconds;
+        var column = series[channel];
+        var rows = new List<Row>(times.Length);
+        for (var row = 0; row < times.Length; row++)
+        {
+            if (times[row] != SampleSeries.Undated)
+            {
+                rows.Add(new Row(times[row], column.IsEmpty ? double.NaN : column[row]));
+            }
+        }
+
+        return rows;
+    }
+
+    /// <summary>Beats of their own join at their own times; within one second a usable reading of the records wins.</summary>
+    private static List<Row> LateRows(IReadOnlyList<TimedHeartRate> late, List<Row> rows)
+    {
+        var taken = rows.Where(row => ChannelLimits.Usable(Channel.HeartRate, row.Value)).Select(row => Second(row.Time)).ToHashSet();
+        return late
+            .Where(beat => !taken.Contains(Second(beat.UnixMilliseconds)))
+            .Select(beat => new Row(beat.UnixMilliseconds, beat.BeatsPerMinute))
+            .ToList();
+    }
+
+    private static long Second(long milliseconds) => (long)Math.Floor(milliseconds / 1000.0);
+
+    private static void SortByTime(List<Row> rows)
+    {
+        for (var row = 1; row < rows.Count; row++)
+        {
+            if (rows[row].Time < rows[row - 1].Time)
+            {
+                var sorted = rows.OrderBy(one => one.Time).ToList();
+                rows.Clear();
+                rows.AddRange(sorted);
+                return;
+            }
+        }
+    }
+
+    private static UsableSample[] WithDurations(List<Row> rows)
+    {
+        var samples = new UsableSample[rows.Count];
+        for (var row = 0; row < samples.Length; row++)
+        {
+            samples[row] = new UsableSample(rows[row].Time, rows[row].Value, Duration(rows, row));
+        }
+
+        return samples;
+    }
+
+    private static int Duration(List<Row> rows, int row) =>
+        row == rows.Count - 1 ? 0 : (int)decimal.Min(LongestMilliseconds, (decimal)rows[row + 1].Time - rows[row].Time);
+
+    private static double Share(List<Row> usable, List<Row> all)
+    {
+        var sampled = Total(all);
+        if (sampled == 0)
+        {
+            return usable.Count > 0 ? 1 : 0;
+        }
+
+        return Math.Min(1, (double)Total(usable) / sampled);
+    }
+
+    private static long Total(List<Row> rows)
+    {
+        var total = 0L;
+        for (var row = 0; row < rows.Count; row++)
+        {
+            total += Duration(rows, row);
+        }
+
+        return total;
+    }
+
+    private readonly record struct Row(long Time, double Value);
+}

@@ -1,0 +1,72 @@
+using LoadWatch.Activities;
+using LoadWatch.People;
+using LoadWatch.Recordings;
+using NodaTime;
+
+namespace LoadWatch.Loads;
+
+/// <summary>Every quantity and zone time of one recording, and why one is missing.</summary>
+/// <param name="Quantities">Sorted by name.</param>
+/// <param name="TimesInZone">Heart rate, power, speed, in this order.</param>
+/// <param name="Remarks">In plain words.</param>
+public sealed record ActivityLoads(
+    IReadOnlyList<Quantity> Quantities,
+    IReadOnlyList<TimeInZone> TimesInZone,
+    IReadOnlyList<string> Remarks)
+{
+    public static ActivityLoads Of(UsableRecording usable, LocalDate date, Person person, AnchorBook anchors, ComputationSettings settings)
+    {
+        var (quantities, remarks) = HeartRateQuantities(usable, date, person, anchors);
+        quantities.AddRange(ExternalLoads.Of(usable));
+        var (ofSets, remark) = SetTotals.Of(usable.Recording.Sets);
+        quantities.AddRange(ofSets);
+        return new ActivityLoads(
+            [.. quantities.OrderBy(quantity => quantity.Name, StringComparer.Ordinal)],
+            [.. Zones(usable, date, person, anchors, settings)],
+            remark is null ? remarks : [.. remarks, remark]);
+    }
+
+    private static (List<Quantity> Quantities, List<string> Remarks) HeartRateQuantities(
+        UsableRecording usable, LocalDate date, Person person, AnchorBook anchors)
+    {
+        List<Quantity> quantities = [];
+        if (!usable.Histograms.TryGetValue(Channel.HeartRate, out var heartRate))
+        {
+            return (quantities, []);
+        }
+
+        var (reserve, missing) = HeartRateReserve.On(date, person, anchors);
+        if (reserve is not null && BanisterTrimp.Of(heartRate, reserve, person.Sex) is { } impulse)
+        {
+            quantities.Add(new Quantity(QuantityNames.BanisterTrimp, impulse, "AU", reserve.Estimated || person.Sex is null));
+        }
+
+        if (HeartRateMaximum.On(date, person, anchors) is { Bpm: > 0 } max && EdwardsLoad.Of(heartRate, max.Bpm) is { } load)
+        {
+            quantities.Add(new Quantity(QuantityNames.EdwardsLoad, load, "AU", max.Estimated));
+        }
+
+        return (quantities, missing is null ? [] : [missing]);
+    }
+
+    private static IEnumerable<TimeInZone> Zones(
+        UsableRecording usable, LocalDate date, Person person, AnchorBook anchors, ComputationSettings settings)
+    {
+        if (usable.Histograms.TryGetValue(Channel.HeartRate, out var heartRate)
+            && ZoneTimes.OfHeartRate(heartRate, date, person, anchors, settings.HeartRateReserveBounds) is { } ofHeartRate)
+        {
+            yield return ofHeartRate;
+        }
+
+        if (usable.Histograms.TryGetValue(Channel.Power, out var power)
+            && anchors.On(date, person.Id, AnchorKind.CriticalPower) is { } criticalPower)
+        {
+            yield return ZoneTimes.OfPower(power, criticalPower, settings.PowerBounds);
+        }
+
+        if (usable.Histograms.TryGetValue(Channel.Speed, out var speed))
+        {
+            yield return ZoneTimes.OfSpeed(speed, settings.SpeedBounds);
+        }
+    }
+}

@@ -1,0 +1,39 @@
+using LoadWatch.Activities;
+using LoadWatch.People;
+
+namespace LoadWatch.Loads;
+
+/// <summary>
+/// Training impulse, summed over samples. Sources: Banister 1991, Modeling elite athletic performance, in MacDougall, Wenger and Green (eds),
+/// Physiological Testing of the High-Performance Athlete; Morton, Fitz-Clarke and Banister 1990, Modeling human performance in running, J Appl Physiol 69:1171-1177.
+/// Load = sum of D x a exp(b x): D minutes at fraction x of heart-rate reserve (0 to 1, clamped), a = 0.64, b = 1.92 for men, a = 0.86, b = 1.67 for women.
+/// Departures: summed over the histogram instead of taken at the session's mean, which under-counts intervals because the weight is convex in x;
+/// where the sex is not stated, the mean of the two pairs (a choice, marked as estimated).
+/// </summary>
+public static class BanisterTrimp
+{
+    private const double MillisecondsPerMinute = 60_000;
+
+    /// <summary>The pair of the formula. Always used together.</summary>
+    public static (double A, double B) Pair(Sex? sex) => sex switch
+    {
+        Sex.Male => (0.64, 1.92),
+        Sex.Female => (0.86, 1.67),
+        _ => (0.75, 1.795),
+    };
+
+    /// <summary>Arbitrary units, 0 or more; null for a histogram without time.</summary>
+    /// <param name="heartRate">Milliseconds by whole bpm.</param>
+    public static double? Of(Histogram heartRate, HeartRateReserve reserve, Sex? sex)
+    {
+        var (a, b) = Pair(sex);
+        double? load = null;
+        foreach (var (bpm, milliseconds) in heartRate.Bins)
+        {
+            var x = reserve.Fraction(bpm);
+            load = (load ?? 0) + (milliseconds / MillisecondsPerMinute * x * a * Math.Exp(b * x));
+        }
+
+        return Significant.Round(load);
+    }
+}

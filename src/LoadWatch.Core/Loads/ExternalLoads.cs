@@ -1,0 +1,49 @@
+using LoadWatch.Activities;
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Loads;
+
+/// <summary>What was done, whatever it cost the body: minutes, distance, mechanical work. Sums and totals, no published source needed.</summary>
+public static class ExternalLoads
+{
+    /// <summary>Only what is known; each at most once.</summary>
+    public static IEnumerable<Quantity> Of(UsableRecording usable)
+    {
+        if (Minutes(usable.Recording) is { } minutes)
+        {
+            yield return new Quantity(QuantityNames.Minutes, minutes, "min", Estimated: false);
+        }
+
+        if (DistanceMetres(usable) is { } metres)
+        {
+            yield return new Quantity(QuantityNames.Distance, metres, "m", Estimated: false);
+        }
+
+        if (usable[Channel.Power] is { } power)
+        {
+            yield return new Quantity(QuantityNames.Work, WorkKilojoules(power), "kJ", Estimated: false);
+        }
+    }
+
+    /// <summary>Timer time, else elapsed time, minutes; null where neither is a time.</summary>
+    public static double? Minutes(Recording recording) =>
+        Significant.Round((Time(recording.TimerSeconds) ?? Time(recording.ElapsedSeconds)) / 60);
+
+    /// <summary>Power times time over usable readings, kilojoules.</summary>
+    public static double WorkKilojoules(UsableChannel power) =>
+        Significant.Round(power.Samples.Sum(sample => sample.Value * sample.Milliseconds) / 1e6);
+
+    /// <summary>The largest reading, metres. It is a running total, so a part of the readings is enough, and no usable share is asked.</summary>
+    private static double? DistanceMetres(UsableRecording usable)
+    {
+        if (!usable.Channels.TryGetValue(Channel.Distance, out var distance) || distance.Samples.Count == 0)
+        {
+            return null;
+        }
+
+        var largest = distance.Samples.Max(sample => sample.Value);
+        return largest >= 0 ? Significant.Round(largest) : null;
+    }
+
+    private static double? Time(double? seconds) => seconds is { } known && double.IsFinite(known) && known >= 0 ? known : null;
+}

@@ -1,0 +1,49 @@
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Loads;
+
+/// <summary>Working sets, repetitions and kilograms of a session. The rest between two sets is no work.</summary>
+public static class SetTotals
+{
+    /// <summary>Sums over what is stated; a total of which nothing is stated is absent, and the remark says which sets lack what.</summary>
+    public static (IReadOnlyList<Quantity> Quantities, string? Remark) Of(IReadOnlyList<StrengthSet> sets)
+    {
+        var work = sets.Where(set => set.Active).ToList();
+        if (work.Count == 0)
+        {
+            return ([], null);
+        }
+
+        var counted = work.Where(set => set.Repetitions is not null).ToList();
+        var weighed = counted.Where(set => set.Kilograms is { } kilograms && double.IsFinite(kilograms)).ToList();
+        List<Quantity> quantities = [new(QuantityNames.Sets, work.Count, "count", Estimated: false)];
+        if (counted.Count > 0)
+        {
+            quantities.Add(new(QuantityNames.Repetitions, counted.Sum(set => (long)set.Repetitions!), "count", Estimated: false));
+        }
+
+        if (weighed.Count > 0)
+        {
+            var kilograms = weighed.Sum(set => set.Kilograms!.Value * set.Repetitions!.Value);
+            quantities.Add(new(QuantityNames.Kilograms, Significant.Round(kilograms), "kg", Estimated: false));
+        }
+
+        return (quantities, Remark(work.Count, counted.Count, weighed.Count));
+    }
+
+    private static string? Remark(int sets, int counted, int weighed)
+    {
+        List<string> lacking = [];
+        if (counted < sets)
+        {
+            lacking.Add($"{sets - counted} without repetitions");
+        }
+
+        if (weighed < counted)
+        {
+            lacking.Add($"{counted - weighed} without kilograms");
+        }
+
+        return lacking.Count == 0 ? null : $"of {sets} working sets {string.Join(", ", lacking)}: the totals are of the others";
+    }
+}

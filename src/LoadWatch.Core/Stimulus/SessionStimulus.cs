@@ -1,0 +1,82 @@
+using LoadWatch.Activities;
+using LoadWatch.Loads;
+using LoadWatch.People;
+using LoadWatch.Recordings;
+using NodaTime;
+
+namespace LoadWatch.Stimulus;
+
+/// <summary>
+/// The stimulus of one recording by body region. Working sets speak for themselves; otherwise the sport says which regions the endurance channels
+/// speak for. Power beats heart rate; channels are never added.
+/// </summary>
+/// <param name="Regions">Legs first; empty where the sport or the exercises name no region.</param>
+/// <param name="Remarks">In plain words.</param>
+public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IReadOnlyList<string> Remarks)
+{
+    private const string NoChannel = "nothing to read it from: power with critical_power, or heart rate with heart_rate_rest and heart_rate_max";
+
+    public static SessionStimulus Of(UsableRecording usable, LocalDate date, Person person, AnchorBook anchors, ComputationSettings settings)
+    {
+        var work = usable.Recording.Sets.Where(set => set.Active).ToList();
+        return work.Count > 0
+            ? SessionOfSets.Of(work, date, person.Id, anchors, settings.Exercises)
+            : OfSport(usable, date, person, anchors, settings.Sports);
+    }
+
+    private static SessionStimulus OfSport(
+        UsableRecording usable,
+        LocalDate date,
+        Person person,
+        AnchorBook anchors,
+        IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> sports)
+    {
+        var sport = usable.Recording.Sport.Name;
+        if (!sports.TryGetValue(sport, out var regions))
+        {
+            return new SessionStimulus([], [$"sport {sport} names no body region: no stimulus from its channels"]);
+        }
+
+        var capacity = PowerCapacity.On(date, person.Id, anchors);
+        var notSeen = NotRead(usable, capacity).ToList();
+        var estimate = Best(usable, capacity, date, person, anchors);
+        return new SessionStimulus([.. regions.Distinct().Order().Select(region => estimate.For(region, notSeen))], []);
+    }
+
+    private static EnduranceEstimate Best(
+        UsableRecording usable, PowerCapacity? capacity, LocalDate date, Person person, AnchorBook anchors)
+    {
+        if (usable[Channel.Power] is { } power && capacity is not null)
+        {
+            return PowerStimulus.Of(power.Samples, capacity);
+        }
+
+        return usable[Channel.HeartRate] is { } heartRate && HeartRateReserve.On(date, person, anchors).Reserve is { } reserve
+            ? HeartRateStimulus.Of(heartRate.Samples, HeartRateDrive.On(date, person.Id, anchors, reserve))
+            : EnduranceEstimate.Nothing with { NotSeen = [NoChannel] };
+    }
+
+    private static IEnumerable<string> NotRead(UsableRecording usable, PowerCapacity? capacity)
+    {
+        if (usable[Channel.Power] is not null)
+        {
+            if (capacity is null)
+            {
+                yield return "power: no critical_power to read it against";
+            }
+        }
+        else if (usable.Channels.ContainsKey(Channel.Power))
+        {
+            yield return "power: too little of it is usable";
+        }
+        else if (usable.Channels.ContainsKey(Channel.Speed))
+        {
+            yield return "speed is not read for stimulus: power with critical_power and power_max, or logged sets, would tell";
+        }
+
+        if (usable.Recording.Sport.Name is "running" or "walking" or "hiking")
+        {
+            yield return "downhill and other lengthening work: cheap in energy, heavy on the muscle";
+        }
+    }
+}

@@ -1,0 +1,26 @@
+namespace LoadWatch.Loads;
+
+public class SetTotalsTests
+{
+    /// <summary>By hand: 2 sets, 8 + 5 repetitions, 8 x 100 + 5 x 60 kg.</summary>
+    [Fact]
+    public void RestBetweenSetsIsNoWork()
+    {
+        var (quantities, remark) = SetTotals.Of([Given.Set("squat", 8, 100), Given.Set(null, 50, 50, active: false), Given.Set("row", 5, 60)]);
+
+        Assert.Equal([("sets", 2.0), ("repetitions", 13.0), ("kilograms", 1100.0)], quantities.Select(one => (one.Name, one.Value)));
+        Assert.Null(remark);
+    }
+
+    [Fact]
+    public void WhatNoSetStatesIsAbsentAndNamed()
+    {
+        var (quantities, remark) = SetTotals.Of([Given.Set("plank", null, null), Given.Set("push_up", 12, null)]);
+
+        Assert.Equal(["sets", "repetitions"], quantities.Select(one => one.Name));
+        Assert.Equal("of 2 working sets 1 without repetitions, 1 without kilograms: the totals are of the others", remark);
+    }
+
+    [Fact]
+    public void ASessionOfRestsAloneHasNoTotals() => Assert.Empty(SetTotals.Of([Given.Set(null, null, null, active: false)]).Quantities);
+}

@@ -1,0 +1,50 @@
+using LoadWatch.People;
+
+namespace LoadWatch.Stimulus;
+
+public class PowerCapacityTests
+{
+    [Fact]
+    public void EverythingMeasuredIsGradeA()
+    {
+        var capacity = On(Given.Cyclist);
+
+        Assert.Equal(Grade.A, capacity.Grade);
+        Assert.Empty(capacity.NotSeen);
+    }
+
+    [Fact]
+    public void AnObservedAnchorIsGradeB() => Assert.Equal(Grade.B, On(With(AnchorKind.CriticalPower, one => one with { Source = AnchorSource.Observed })).Grade);
+
+    [Theory]
+    [InlineData(-183, true)]
+    [InlineData(-184, false)]
+    public void ATrueMaximumIsAtMostSixMonthsOld(int days, bool counts) =>
+        Assert.Equal(counts, On(With(AnchorKind.PowerMax, one => one with { Date = Given.Date.PlusDays(days) })).Maximum is not null);
+
+    [Fact]
+    public void AnUndatedMaximumIsOfUnknownAge() => Assert.Null(On(With(AnchorKind.PowerMax, one => one with { Date = null })).Maximum);
+
+    [Theory]
+    [InlineData(625, true)]
+    [InlineData(624, false)]
+    public void ATrueMaximumIsFarAboveCriticalPower(double watts, bool counts)
+    {
+        var capacity = On(With(AnchorKind.PowerMax, one => one with { Value = watts }));
+
+        Assert.Equal(counts, capacity.Maximum is not null);
+        Assert.Equal(counts, capacity.NotSeen.Count == 0);
+    }
+
+    [Fact]
+    public void WithoutWPrimeItIsALowerBound() =>
+        Assert.Equal(Grade.D, On([.. Given.Cyclist.Where(one => one.Kind != AnchorKind.WPrime)]).Grade);
+
+    [Fact]
+    public void WithoutCriticalPowerThereIsNone() => Assert.Null(PowerCapacity.On(Given.Date, "p1", AnchorBook.Empty));
+
+    private static PowerCapacity On(Anchor[] anchors) => PowerCapacity.On(Given.Date, "p1", Given.Anchors(anchors))!;
+
+    private static Anchor[] With(AnchorKind kind, Func<Anchor, Anchor> change) =>
+        [.. Given.Cyclist.Select(one => one.Kind == kind ? change(one) : one)];
+}

@@ -1,0 +1,137 @@
+using CsCheck;
+using LoadWatch.Activities;
+using LoadWatch.People;
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Stimulus;
+
+public class SessionStimulusTests
+{
+    private static readonly Anchor[] HeartAnchors = [Given.Anchor(AnchorKind.HeartRateRest, 50), Given.Anchor(AnchorKind.HeartRateMax, 190)];
+
+    [Fact]
+    public void SprintsOnTheBikeAreBoutsOfTheLegs()
+    {
+        var legs = Assert.Single(Of("cycling", Given.Cyclist, (Channel.Power, Given.Steps((100, 60), (800, 6), (100, 60), (800, 6), (100, 60)))).Regions);
+
+        Assert.Equal((BodyRegion.Legs, Grade.A, "power"), (legs.Region, legs.Grade, legs.Channel));
+        Assert.Equal(new Band(2, 2, 2), legs.HardBouts);
+        Assert.Equal(12, legs.LargeSeconds!.Value.Mid, 0.1);
+        Assert.Null(legs.HardRepetitions);
+        Assert.Null(legs.HardSets);
+        Assert.Empty(legs.NotSeen);
+    }
+
+    [Fact]
+    public void AnHourBelowCriticalPowerHoldsNoBout()
+    {
+        var legs = Assert.Single(Of("cycling", Given.Cyclist, (Channel.Power, Given.Steps((240, 3600)))).Regions);
+
+        Assert.Equal(0, legs.HardBouts!.Value.Mid);
+        Assert.Equal(3600, legs.SlowSeconds!.Value.Mid);
+    }
+
+    [Fact]
+    public void WithoutATrueMaximumBoutsAndTheLargestClassAreUnknown()
+    {
+        var anchors = Given.Cyclist.Where(anchor => anchor.Kind != AnchorKind.PowerMax).ToArray();
+
+        var legs = Assert.Single(Of("cycling", anchors, (Channel.Power, Given.Steps((400, 60)))).Regions);
+
+        Assert.Null(legs.HardBouts);
+        Assert.Null(legs.LargeSeconds);
+        Assert.Equal(60, legs.MediumSeconds!.Value.Mid);
+        Assert.Contains("power_max", Assert.Single(legs.NotSeen), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void PowerBeatsHeartRateAndIsNotAddedToIt()
+    {
+        var power = (Channel.Power, Given.Steps((200, 600)));
+        var heartRate = (Channel.HeartRate, Given.Steps((150, 600)));
+
+        var alone = Of("cycling", [.. Given.Cyclist, .. HeartAnchors], power).Regions[0];
+        var both = Of("cycling", [.. Given.Cyclist, .. HeartAnchors], power, heartRate).Regions[0];
+
+        Assert.Equal("power", both.Channel);
+        Assert.Equal(alone.MediumSeconds, both.MediumSeconds);
+    }
+
+    [Fact]
+    public void HeartRateAloneIsGradeEAndNeverSaysNone()
+    {
+        var legs = Assert.Single(Of("running", HeartAnchors, (Channel.HeartRate, Given.Steps((150, 600))), (Channel.Speed, Given.Steps((3, 600)))).Regions);
+
+        Assert.Equal((Grade.E, "heart_rate"), (legs.Grade, legs.Channel));
+        Assert.Null(legs.HardBouts);
+        Assert.Null(legs.LargeSeconds);
+        Assert.Equal(600, legs.SlowSeconds!.Value.Mid, 1);
+        Assert.Contains(legs.NotSeen, reason => reason.StartsWith("speed is not read", StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void ASessionThatNothingCanReadIsUnknownInItsRegions()
+    {
+        var regions = Of("rowing", [], (Channel.Power, Given.Steps((200, 600)))).Regions;
+
+        Assert.Equal([BodyRegion.Legs, BodyRegion.Trunk, BodyRegion.Arms], regions.Select(region => region.Region));
+        Assert.All(regions, region => Assert.True(region is { Channel: "none", HardBouts: null, SlowSeconds: null, MediumSeconds: null }));
+        Assert.Contains("power: no critical_power to read it against", regions[0].NotSeen);
+    }
+
+    [Fact]
+    public void ASportWithoutRegionsIsAskedAbout()
+    {
+        var stimulus = Of("fencing", HeartAnchors, (Channel.HeartRate, Given.Steps((150, 60))));
+
+        Assert.Empty(stimulus.Regions);
+        Assert.Contains("fencing", Assert.Single(stimulus.Remarks), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void SetsGoToTheRegionsOfTheirExercises()
+    {
+        var maximum = Given.Anchor(AnchorKind.OneRepetitionMax, 100, Given.Date.PlusDays(-7), exercise: "squat");
+
+        var stimulus = OfSets([maximum], Given.Set("squat", 8, 80, 0), Given.Set(null, null, null, active: false), Given.Set("squat", 8, 80, 0),
+            Given.Set("bench_press", 8, 60));
+
+        Assert.Equal([BodyRegion.Legs, BodyRegion.Arms], stimulus.Regions.Select(region => region.Region));
+        Assert.Equal((Grade.A, 16.0, 2), (stimulus.Regions[0].Grade, stimulus.Regions[0].HardRepetitions!.Value.Mid, stimulus.Regions[0].HardSets));
+        Assert.Equal(16, stimulus.Regions[0].LargeSeconds!.Value.Mid, 1e-9);
+        Assert.Null(stimulus.Regions[1].HardRepetitions);
+        Assert.Equal("1 set of bench_press: no one_repetition_max, or repetitions in reserve up to 12 in all", Assert.Single(stimulus.Regions[1].NotSeen));
+    }
+
+    [Fact]
+    public void AnUnknownExerciseIsAskedForNotGuessed()
+    {
+        var stimulus = OfSets([], Given.Set("squat", 8, 80, 2), Given.Set("turkish_walk", 8, 80, 2), Given.Set(null, 8, 80, 2));
+
+        Assert.Equal(BodyRegion.Legs, Assert.Single(stimulus.Regions).Region);
+        Assert.Equal(
+            ["1 set of turkish_walk: which body region?", "1 set without an exercise: which body region?"],
+            stimulus.Regions[0].NotSeen);
+        Assert.Equal(stimulus.Regions[0].NotSeen, stimulus.Remarks);
+    }
+
+    [Fact]
+    public void BandsAndClassesAreAlwaysOrdered() =>
+        Gen.Double[0, 1500].Array[2, 200].Sample(watts =>
+        {
+            var legs = Of("cycling", Given.Cyclist, (Channel.Power, watts)).Regions[0];
+            Band[] bands = [legs.HardBouts!.Value, legs.SlowSeconds!.Value, legs.MediumSeconds!.Value, legs.LargeSeconds!.Value];
+            return Array.TrueForAll(bands, band => band.Low >= 0 && band.Low <= band.Mid && band.Mid <= band.High && double.IsFinite(band.High))
+                && legs.SlowSeconds.Value.Mid >= legs.MediumSeconds.Value.Mid
+                && legs.MediumSeconds.Value.Mid >= legs.LargeSeconds.Value.Mid;
+        });
+
+    private static SessionStimulus Of(string sport, Anchor[] anchors, params (Channel Channel, double[] Values)[] columns) =>
+        Of(Given.Recording(sport, Given.EverySecond(columns)), anchors);
+
+    private static SessionStimulus OfSets(Anchor[] anchors, params StrengthSet[] sets) =>
+        Of(Given.Recording("training", SampleSeries.Empty, sets), anchors);
+
+    private static SessionStimulus Of(Recording recording, Anchor[] anchors) => SessionStimulus.Of(
+        new UsableRecording(recording, 0.5), Given.Date, Given.Person(), Given.Anchors(anchors), new ComputationSettings());
+}

@@ -1,0 +1,96 @@
+using LoadWatch.Recordings;
+using static LoadWatch.Decoding.Fit.FitBaseType;
+
+namespace LoadWatch.Decoding.Fit;
+
+/// <summary>Developer fields that stand for a field of the profile.</summary>
+public class FitDeveloperFieldTests
+{
+    private const int RecordMessage = 20;
+    private const int PowerField = 7;
+    private const int SpeedField = 6;
+    private static readonly FitFieldLayout Time = new(253, Unsigned32);
+
+    [Fact]
+    public void ADeveloperFieldFillsWhereTheProfilesIsAbsent()
+    {
+        var samples = Described(Parts.Begin(), PowerField, Unsigned16)
+            .Define(0, new(RecordMessage, Time, new(7, Unsigned16)) { Developer = [new(0, Unsigned16, 0)] })
+            .Message(0, Parts.Base, 200, 300)
+            .Message(0, Parts.Base + 1, FitValue.None, 300)
+            .Message(0, Parts.Base + 2, FitValue.None, FitValue.None)
+            .Samples();
+        Assert.Equal([200, 300, double.NaN], samples[Channel.Power]);
+    }
+
+    [Fact]
+    public void ADescriptionBehindTheDefinitionCounts()
+    {
+        var part = Parts.Begin()
+            .Define(0, new(RecordMessage, Time) { Developer = [new(0, Unsigned16, 0)] })
+            .Message(0, Parts.Base, 300);
+        var samples = Described(part, PowerField, Unsigned16).Message(0, Parts.Base + 1, 301).Samples();
+        Assert.Equal([double.NaN, 301], samples[Channel.Power]);
+    }
+
+    [Fact]
+    public void ANewDescriptionReplacesTheOld()
+    {
+        var part = Described(Parts.Begin(), PowerField, Unsigned16)
+            .Define(0, new(RecordMessage, Time) { Developer = [new(0, Unsigned16, 0)] })
+            .Message(0, Parts.Base, 300);
+        var samples = Described(part, SpeedField, Unsigned16).Message(0, Parts.Base + 1, 3).Samples();
+        Assert.Equal([300, double.NaN], samples[Channel.Power]);
+        Assert.Equal([double.NaN, 3], samples[Channel.Speed]);
+    }
+
+    [Theory]
+    [InlineData(255, "m/s", 5, 5.0)]
+    [InlineData(1, "m/s", 5, 5.0)]
+    [InlineData(10, "m/s", 53, 5.3)]
+    [InlineData(255, "km/h", 18, 5.0)]
+    public void ScaleAndUnitAreApplied(int scale, string unit, double raw, double expected)
+    {
+        var samples = Described(Parts.Begin(), SpeedField, Unsigned16, scale, unit)
+            .Define(0, new(RecordMessage, Time) { Developer = [new(0, Unsigned16, 0)] })
+            .Message(0, Parts.Base, raw)
+            .Samples();
+        Assert.Equal(expected, samples[Channel.Speed][0], 1e-9);
+    }
+
+    [Fact]
+    public void FloatsAndBothByteOrdersAreRead()
+    {
+        var samples = Described(Parts.Begin(), SpeedField, Real32)
+            .Define(0, new(RecordMessage, Time) { Developer = [new(0, Real32, 0)], BigEndian = true })
+            .Message(0, Parts.Base, 4.25)
+            .Samples();
+        Assert.Equal([4.25], samples[Channel.Speed]);
+    }
+
+    [Fact]
+    public void AFieldOfAnotherMessageOrWithoutDescriptionIsPassedOver()
+    {
+        var samples = Described(Parts.Begin(), PowerField, Unsigned16, message: 18)
+            .Define(0, new(RecordMessage, Time, new(3, Unsigned8)) { Developer = [new(0, Unsigned16, 0), new(9, Bytes, 3, 5), new(1, Unsigned8, 0, 0)] })
+            .Message(0, Parts.Base, 99, 300)
+            .Samples();
+        Assert.Equal([Channel.HeartRate], samples.Channels);
+    }
+
+    [Fact]
+    public void DescriptionsEndWithTheirPart()
+    {
+        var first = Described(Parts.Begin(), PowerField, Unsigned16).DefineRecord().Message(0, Parts.Base, 99).ToBytes();
+        var second = Parts.Begin().Define(0, new(RecordMessage, Time) { Developer = [new(0, Unsigned16, 0)] }).Message(0, Parts.Base, 300).ToBytes();
+        var decoded = Parts.Decode(first, second);
+        Assert.Equal(2, decoded.Recordings.Count);
+        Assert.Empty(decoded.Recordings[1].Samples.Channels);
+    }
+
+    private static FitPartWriter Described(
+        FitPartWriter part, int field, FitBaseType type, int scale = 255, string unit = "", int message = RecordMessage) =>
+        part
+            .Define(14, new(206, new(0, Unsigned8), new(1, Unsigned8), new(2, Unsigned8), new(6, Unsigned8), new(8, Text, 8), new(14, Unsigned16), new(15, Unsigned8)))
+            .Message(14, 0, 0, (int)type, scale == 255 ? FitValue.None : scale, unit, message, field);
+}
