@@ -4,10 +4,10 @@ namespace LoadWatch.Service.Demo;
 
 /// <summary>A part in the demo: who, how they train, what happens to them.</summary>
 /// <param name="Age">Years in the year of the last date.</param>
-internal sealed record DemoPart(string Id, string Name, string Group, int Age, Sex Sex, WeekPlan Week, DemoPlot Plot = DemoPlot.Usual);
+public sealed record DemoPart(string Id, string Name, string Group, int Age, Sex Sex, WeekPlan Week, DemoPlot Plot = DemoPlot.Usual);
 
 /// <summary>Everybody in the demo. Invented people of an invented place.</summary>
-internal static class DemoCast
+public static class DemoCast
 {
     public const string Boat = "boat";
     public const string Class = "class";

@@ -6,7 +6,7 @@ namespace LoadWatch.Service.Demo;
 
 /// <summary>A part with the numbers drawn for it.</summary>
 /// <param name="Anchors">As <c>anchors.csv</c> will say, already rounded.</param>
-internal sealed record DemoPerson(DemoPart Part, Person Person, Device Device, IReadOnlyList<Anchor> Anchors)
+public sealed record DemoPerson(DemoPart Part, Person Person, Device Device, IReadOnlyList<Anchor> Anchors)
 {
     /// <summary>People's zone in the demo.</summary>
     public static DateTimeZone Zone { get; } = DateTimeZoneProviders.Tzdb["Europe/Helsinki"];

@@ -17,7 +17,7 @@ internal sealed class DemoRandom
 
     /// <param name="seed">Of the whole demo.</param>
     /// <param name="words">What the stream is for.</param>
-    public static DemoRandom For(int seed, params ReadOnlySpan<string> words) => new(Hash(unchecked((ulong)seed) * Golden, words));
+    public static DemoRandom For(int seed, params ReadOnlySpan<string> words) => new(Hash(unchecked((ulong)seed * Golden), words));
 
     /// <summary>The stream of one session.</summary>
     public static DemoRandom For(int seed, string person, LocalDateTime start) =>

@@ -4,7 +4,7 @@ using LoadWatch.Recordings;
 namespace LoadWatch.Service.Demo;
 
 /// <summary>The recording that a reader of the activity's file would get.</summary>
-internal static class DemoRecording
+public static class DemoRecording
 {
     public static Recording Of(FitActivity activity)
     {

@@ -5,7 +5,7 @@ using NodaTime;
 namespace LoadWatch.Service.Demo;
 
 /// <summary>From what is planned to what a device records.</summary>
-internal static class DemoSessions
+public static class DemoSessions
 {
     private static readonly Sport Water = new("rowing");
     private static readonly Sport Machine = new("rowing", "indoor_rowing");

@@ -4,7 +4,7 @@ using static NodaTime.IsoDayOfWeek;
 namespace LoadWatch.Service.Demo;
 
 /// <summary>What a session of the demo is made of.</summary>
-internal enum SessionKind
+public enum SessionKind
 {
     Row,
     RowIntervals,
@@ -18,11 +18,11 @@ internal enum SessionKind
 /// <summary>One session of a usual week.</summary>
 /// <param name="At">Local start.</param>
 /// <param name="Minutes">Usual length; intervals are as long as their efforts.</param>
-internal sealed record WeekSlot(IsoDayOfWeek Day, LocalTime At, SessionKind Kind, int Minutes);
+public sealed record WeekSlot(IsoDayOfWeek Day, LocalTime At, SessionKind Kind, int Minutes);
 
 /// <summary>A usual week. Rest days stand alone, or in pairs where three days are trained, so no week looks heavier because its rest is not known yet.</summary>
 /// <param name="LengthDeviation">Standard deviation of a session's length around its usual one, as a fraction.</param>
-internal sealed record WeekPlan(double LengthDeviation, IReadOnlyList<WeekSlot> Slots)
+public sealed record WeekPlan(double LengthDeviation, IReadOnlyList<WeekSlot> Slots)
 {
     private static readonly LocalTime Morning = new(6, 40);
     private static readonly LocalTime Forenoon = new(10, 0);
