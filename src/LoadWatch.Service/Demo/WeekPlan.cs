@@ -84,7 +84,7 @@ public sealed record WeekPlan(double LengthDeviation, IReadOnlyList<WeekSlot> Sl
 
     private static IEnumerable<WeekSlot> RowsOf(IsoDayOfWeek day)
     {
-        yield return new(day, Morning, day == Tuesday ? SessionKind.RowIntervals : SessionKind.Row, 48);
-        yield return new(day, Afternoon, SessionKind.Row, 42);
+        yield return new(day, Morning, day == Tuesday ? SessionKind.RowIntervals : SessionKind.Row, 38);
+        yield return new(day, Afternoon, SessionKind.Row, 33);
     }
 }
