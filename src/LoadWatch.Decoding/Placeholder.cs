@@ -1,1 +1,0 @@
-namespace LoadWatch.Decoding.Internal; internal static class Placeholder { }
