@@ -1,0 +1,53 @@
+namespace LoadWatch.Service.Demo;
+
+/// <summary>A way by which a session reaches the inbox.</summary>
+internal enum Delivery
+{
+    /// <summary>As a FIT file.</summary>
+    File,
+
+    /// <summary>With the rest of its week in a zip file only.</summary>
+    Packed,
+
+    /// <summary>As a gzip file only.</summary>
+    Compressed,
+
+    /// <summary>As a CSV only.</summary>
+    Table,
+
+    /// <summary>As a FIT file, and by a second device as a CSV with less in it.</summary>
+    FileAndTable,
+
+    /// <summary>As two files of equal content.</summary>
+    Twice,
+
+    /// <summary>As a whole file, and as one of which the end is missing.</summary>
+    AlsoCut,
+}
+
+/// <summary>Whose sessions come by another way than most, and when.</summary>
+internal static class DeliveryPlan
+{
+    /// <param name="back">Days before the morning of the brief.</param>
+    /// <param name="hasSets">A CSV holds samples only.</param>
+    public static Delivery Of(string person, int back, bool hasSets) => (person, back, hasSets) switch
+    {
+        ("lauri", >= 22 and <= 28, _) => Delivery.Packed,
+        ("milla", >= 4 and <= 10, _) => Delivery.Compressed,
+        ("otso", >= 8 and <= 14, false) => Delivery.Table,
+        ("petra", >= 4 and <= 10, false) => Delivery.FileAndTable,
+        ("kaisa", >= 4 and <= 6, _) => Delivery.Twice,
+        ("joel", >= 4 and <= 6, _) => Delivery.AlsoCut,
+        _ => Delivery.File,
+    };
+
+    /// <summary>In words, for a terminal.</summary>
+    public static IReadOnlyList<string> Lines { get; } =
+    [
+        "A week of Lauri Viimakoski's comes as a zip file, some days of Milla Usvalehto's as gzip files, a week of Otso Kelovaara's rows as CSV.",
+        "Some rows of Petra Sarahiisi's come twice, from two devices: each counts once, the richer one stands.",
+        "Kaisa Suvantoharju has sent some files twice under another name: each counts once.",
+        "Some uploads of Joel Terhokari's broke off: those halves are refused, the whole files beside them count.",
+        "A file in a folder that names nobody is held; a settings file of Henri Loivarinne's is put aside.",
+    ];
+}

@@ -1,0 +1,66 @@
+using System.Globalization;
+using System.Text;
+using LoadWatch.People;
+using NodaTime;
+using NodaTime.Text;
+
+namespace LoadWatch.Service.Demo;
+
+/// <summary>The three files beside the inbox: configuration, roster, reference values.</summary>
+internal static class DemoConfiguration
+{
+    private const string Settings = """
+        {
+          // The demo's configuration. Everybody in it is invented. Paths are relative to this file.
+          "data": "data",                     // archive of originals and database
+          "pages": "pages",                   // one page per contact
+          "notices": "notices",               // one file of notices per month
+          "time_zone": "Europe/Helsinki",     // of everybody who names none
+
+          "inboxes": [
+            // A sub-folder named after a person holds that person's recordings; "leave" keeps the files where they are.
+            { "name": "inbox", "path": "inbox", "take": "leave" }
+          ],
+
+          "groups": [
+            { "id": "boat", "name": "Rowing squad" },
+            { "id": "class", "name": "Strength class" },
+            { "id": "masters", "name": "Masters" }
+          ],
+
+          // Who is told, about whom, and at what local time.
+          "contacts": [
+            { "id": "coach", "name": "Sorja Hallakoski", "role": "coach", "groups": ["boat"], "people": [], "brief_at": "06:30" },
+            { "id": "physio", "name": "Tyyne Varpusalo", "role": "physiotherapist", "groups": ["class"], "people": [], "brief_at": "07:15" },
+            { "id": "henri", "name": "Henri Loivarinne", "role": "self", "groups": ["masters"], "people": ["henri"], "brief_at": "06:00" }
+          ]
+        }
+
+        """;
+
+    public static IEnumerable<DemoFile> Files(IReadOnlyList<DemoPerson> people, LocalDate until)
+    {
+        var written = DemoPerson.Zone.AtStartOfDay(until.PlusDays(-DemoTimeline.Days)).ToInstant();
+        yield return new DemoFile("loadwatch.json", Encoding.UTF8.GetBytes(Settings.ReplaceLineEndings("\n")), written);
+        yield return new DemoFile("roster.csv", Table("person,name,group,birth_year,sex,time_zone", people.Select(Roster)), written);
+        yield return new DemoFile(
+            "anchors.csv", Table("person,date,anchor,value,unit,source,exercise", people.SelectMany(person => person.Anchors).Select(Anchor)), written);
+    }
+
+    private static byte[] Table(string header, IEnumerable<string> rows) =>
+        Encoding.UTF8.GetBytes(string.Join('\n', rows.Prepend(header)) + "\n");
+
+    private static string Roster(DemoPerson demo)
+    {
+        var person = demo.Person;
+        var sex = person.Sex == Sex.Female ? "f" : "m";
+        return string.Create(CultureInfo.InvariantCulture, $"{person.Id},{person.Name},{person.Group},{person.BirthYear},{sex},");
+    }
+
+    private static string Anchor(Anchor anchor)
+    {
+        var info = AnchorKinds.Of(anchor.Kind);
+        var date = anchor.Date is { } known ? LocalDatePattern.Iso.Format(known) : "";
+        return string.Create(CultureInfo.InvariantCulture, $"{anchor.Person},{date},{info.Name},{anchor.Value},{info.Unit},measured,{anchor.Exercise}");
+    }
+}

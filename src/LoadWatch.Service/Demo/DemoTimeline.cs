@@ -1,0 +1,44 @@
+using NodaTime;
+
+namespace LoadWatch.Service.Demo;
+
+/// <summary>Which sessions a part holds, date by date. Dates of the plots count back from the last date, weekdays are those of the calendar.</summary>
+internal static class DemoTimeline
+{
+    /// <summary>Length of the demo, days.</summary>
+    public const int Days = 84;
+
+    /// <summary>Nobody misses a session so near the end, days back.</summary>
+    private const int UnbrokenDays = 42;
+
+    private const double MissedShare = 0.06;
+
+    /// <param name="until">The morning of the brief; the sessions end the day before.</param>
+    public static IEnumerable<PlannedSession> Of(DemoPart part, int seed, LocalDate until)
+    {
+        for (var back = Days; back >= 1; back--)
+        {
+            var date = until.PlusDays(-back);
+            foreach (var slot in Slots(part, date, back).Where(slot => !IsMissed(part, seed, date + slot.At, back)))
+                yield return new PlannedSession(date, slot, HeartRateSeen: part.Plot != DemoPlot.StrapFailed || back > 21);
+        }
+    }
+
+    private static IEnumerable<WeekSlot> Slots(DemoPart part, LocalDate date, int back)
+    {
+        var usual = part.Week.On(date.DayOfWeek);
+        return part.Plot switch
+        {
+            DemoPlot.RampUp when back <= 7 => WeekPlan.TwoRowsADay.Where(slot => slot.Day == date.DayOfWeek),
+            DemoPlot.EasyOnly when back <= 16 => usual.Select(slot => slot with { Kind = SessionKind.Row }),
+            DemoPlot.SilentNineDays when back <= 9 => [],
+            DemoPlot.SilentTwoWeeks when back <= 14 => [],
+            DemoPlot.ArmsForWeeks when back <= 24 => usual.Select(slot => slot with { Kind = SessionKind.ClassArms }),
+            DemoPlot.ArmsForDays when back <= 12 => usual.Select(slot => slot with { Kind = SessionKind.ClassArms }),
+            _ => usual,
+        };
+    }
+
+    private static bool IsMissed(DemoPart part, int seed, LocalDateTime start, int back) =>
+        back > UnbrokenDays && back < Days - 7 && DemoRandom.For(seed, "missed " + part.Id, start).Between(0, 1) < MissedShare;
+}
