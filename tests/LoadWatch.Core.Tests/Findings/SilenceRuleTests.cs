@@ -56,6 +56,14 @@ public class SilenceRuleTests
         Assert.Equal(4, Rule.Of(Recorded(120, recorded))[0].Limit);
     }
 
+    /// <summary>By hand: six gaps, the oldest begins 84 days before the last recording; a day earlier it is none, and five are too few.</summary>
+    [Fact]
+    public void AGapThatBeginsWhereTheLookBackBeginsCounts()
+    {
+        Assert.Equal(22, Rule.Of(Recorded(120, 0, 20, 36, 48, 60, 72, 84))[0].Limit);
+        Assert.Empty(Rule.Of(Recorded(120, 0, 20, 36, 48, 60, 72, 85)));
+    }
+
     [Fact]
     public void AfterSixWeeksItIsSilenceWhateverTheRhythm()
     {
