@@ -73,7 +73,8 @@ public sealed class Archive(DataFolder folder)
         return string.Equals(Convert.ToHexStringLower(SHA256.HashData(stream)), sha, StringComparison.Ordinal);
     }
 
-    private string PathOf(string sha)
+    /// <summary>Where the object lies, or would lie.</summary>
+    public string PathOf(string sha)
     {
         if (sha.Length != 64 || !sha.All(char.IsAsciiHexDigitLower))
         {

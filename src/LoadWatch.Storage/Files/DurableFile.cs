@@ -37,6 +37,20 @@ public static class DurableFile
     public static bool RenameWithoutOverwrite(string from, string to) =>
         OperatingSystem.IsLinux() ? RenameOnLinux(from, to) : RenameElsewhere(from, to);
 
+    /// <summary>Writes a whole file in place of another: aside, to the disk, renamed. A reader meets the old or the new one.</summary>
+    public static void Replace(string path, ReadOnlySpan<byte> bytes)
+    {
+        var aside = path + ".part";
+        File.Delete(aside);
+        using (var file = PrivateFiles.OpenOrCreate(aside, FileShare.None))
+        {
+            file.Write(bytes);
+            file.Flush(flushToDisk: true);
+        }
+
+        File.Move(aside, path, overwrite: true);
+    }
+
     private static bool RenameOnLinux(string from, string to)
     {
         switch (RenameInOneStep(from, to))
