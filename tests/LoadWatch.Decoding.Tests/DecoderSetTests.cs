@@ -86,4 +86,11 @@ public class DecoderSetTests
     [InlineData(ContentKind.Text, 2, true)]
     public void ContainersLieTwoDeepAtMost(ContentKind kind, int depth, bool allowed) =>
         Assert.Equal(allowed, DecoderSet.CheckNesting(kind, depth) is null);
+
+    private static string Reason(byte[] bytes)
+    {
+        var file = Decoders.Decode(bytes);
+        Assert.Empty(file.Recordings);
+        return Assert.Single(file.Problems).ToString();
+    }
 }

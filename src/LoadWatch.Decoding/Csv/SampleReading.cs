@@ -102,6 +102,7 @@ internal sealed class SampleReading
             problems.Add(doubt);
         }
 
+        clock.Accept(time, rows.Line);
         samples.Add(time.ToUnixTimeMilliseconds(), readings.Values);
         return null;
     }
