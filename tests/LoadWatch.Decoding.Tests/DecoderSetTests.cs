@@ -1,4 +1,5 @@
 using System.Text;
+using CsCheck;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Decoding.Tests.Containers;
 using LoadWatch.Recordings;
@@ -86,4 +87,37 @@ public class DecoderSetTests
     [InlineData(ContentKind.Text, 2, true)]
     public void ContainersLieTwoDeepAtMost(ContentKind kind, int depth, bool allowed) =>
         Assert.Equal(allowed, DecoderSet.CheckNesting(kind, depth) is null);
+
+    [Fact]
+    public void NoDamageOfAFewBytesCrashes()
+    {
+        byte[][] whole =
+        [
+            Encoding.UTF8.GetBytes(Csv), [0xFF, 0xFE, .. Encoding.Unicode.GetBytes(Csv)], Packed.Gzip(Encoding.UTF8.GetBytes(Csv)),
+            Packed.Zip(("a.csv", Encoding.UTF8.GetBytes(Csv)), ("b/", []), ("b/c.gz", Packed.Gzip(Encoding.UTF8.GetBytes(Csv)))),
+        ];
+
+        Gen.Select(Gen.Int[0, whole.Length - 1].Select(index => whole[index]), Gen.Select(Gen.Int[0, 1000], Gen.Byte).Array[1, 4], Gen.Int[0, 20]).Sample((bytes, changes, cut) =>
+        {
+            var changed = bytes[..^cut];
+            foreach (var (at, value) in changes)
+            {
+                changed[at % changed.Length] = value;
+            }
+
+            // Whatever comes, there is either something in it or a problem.
+            var file = Decoders.Decode(changed);
+            Assert.True(file.Recordings.Count > 0 || file.Problems.Count > 0);
+            Decoders.CheckCompleteness(changed);
+            var unpacked = Decoders.Unpack(changed, "x");
+            Assert.All(unpacked.Members, member => Assert.True(member.Problem is null || member.Bytes.IsEmpty));
+        }, iter: 5000);
+    }
+
+    private static string Reason(byte[] bytes)
+    {
+        var file = Decoders.Decode(bytes);
+        Assert.Empty(file.Recordings);
+        return Assert.Single(file.Problems).ToString();
+    }
 }

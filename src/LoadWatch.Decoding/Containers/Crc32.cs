@@ -10,7 +10,7 @@ internal static class Crc32
         var crc = uint.MaxValue;
         foreach (var value in bytes)
         {
-            crc = Table[(byte)(crc ^ value)] ^ (crc >> 8);
+            crc = Table[(crc ^ value) & 0xFF] ^ (crc >> 8);
         }
 
         return ~crc;

@@ -21,6 +21,7 @@ internal sealed class CsvRows : IDisposable
         {
             HasHeader = false,
             Separator = separator,
+            DetectSeparatorHint = false,
             Encoding = text.Encoding,
             TrackLineNumbers = true,
             TrimWhitespace = true,

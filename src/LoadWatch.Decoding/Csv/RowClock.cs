@@ -33,17 +33,19 @@ internal sealed class RowClock
     public Offset? LocalOffset { get; private set; }
 
     /// <returns>Null with the problem, for a row that cannot be dated.</returns>
-    public Instant? Read(CsvRows rows, out Problem? problem)
+    public Instant? Read(CsvRows rows, out Problem? problem) =>
+        startColumn is { } column ? FromStart(rows, column, out problem) : Moment(rows, timeColumn, previous, out problem);
+
+    /// <summary>Takes the time of a row that counts as the one that the next is compared with.</summary>
+    public void Accept(Instant time, long line)
     {
-        var time = startColumn is { } column ? FromStart(rows, column, out problem) : Moment(rows, timeColumn, previous, out problem);
-        if (time is { } now)
+        if (time < previous)
         {
-            CountBackwards(now, rows.Line);
-            LocalOffset ??= stated && previous is null ? zone.Zone.GetUtcOffset(now) : null;
-            previous = now;
+            backwards.Add(line);
         }
 
-        return time;
+        LocalOffset ??= stated && previous is null ? zone.Zone.GetUtcOffset(time) : null;
+        previous = time;
     }
 
     /// <summary>What is to be known about the times although all rows count.</summary>
@@ -100,14 +102,6 @@ internal sealed class RowClock
 
         LocalOffset ??= written.Offset;
         return written.Instant ?? zone.Place(written.Local, before, rows.Line);
-    }
-
-    private void CountBackwards(Instant now, long line)
-    {
-        if (now < previous)
-        {
-            backwards.Add(line);
-        }
     }
 
     private Problem Warning(LineCount lines, string reason) =>

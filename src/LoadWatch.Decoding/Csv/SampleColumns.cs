@@ -31,11 +31,19 @@ internal sealed class SampleColumns(int rowsAtMost)
         Count++;
     }
 
+    /// <summary>Hands the columns over; nothing can be added after it.</summary>
     public SampleSeries ToSeries()
     {
-        var columns = Enum.GetValues<Channel>()
-            .Where(channel => values[(int)channel] is not null)
-            .ToDictionary(channel => channel, channel => Cut(values[(int)channel]!));
+        var columns = new Dictionary<Channel, double[]>();
+        foreach (var channel in Enum.GetValues<Channel>())
+        {
+            if (values[(int)channel] is { } column)
+            {
+                columns[channel] = Cut(column);
+                values[(int)channel] = null;
+            }
+        }
+
         return new SampleSeries(Cut(times), columns);
     }
 

@@ -21,7 +21,7 @@ internal sealed class SampleReading
         this.table = table;
         this.layout = layout;
         clock = new RowClock(table, layout);
-        samples = new SampleColumns(Math.Min(table.Text.LinesAtMost(), RowsAtMost));
+        samples = new SampleColumns(Math.Clamp(table.Text.LinesAtMost() - table.RowsAbove, 0, RowsAtMost));
         readings = new ReadingCells(table, layout);
         sport = new SportCell(table, layout);
     }
@@ -52,24 +52,30 @@ internal sealed class SampleReading
                 return Refusal($"more than {RowsAtMost} rows", rows.Line);
             }
 
-            if (ReadRow(rows) is { } problem)
+            if (ReadRow(rows) is { } problem && PutAside(rows, problem) is { } refusal)
             {
-                if (NamesAgain(rows) is not { } again)
-                {
-                    problems.AddBad(problem, rows.LineSpan);
-                }
-                else if (again.Severity == ProblemSeverity.Error)
-                {
-                    return again;
-                }
-                else
-                {
-                    problems.Add(again);
-                }
+                return refusal;
             }
         }
 
         return rows.Fault;
+    }
+
+    /// <summary>Lists a row that gives no sample; not null where the file cannot be used because of it.</summary>
+    private Problem? PutAside(CsvRows rows, Problem problem)
+    {
+        var again = NamesAgain(rows);
+        switch (again?.Severity)
+        {
+            case null:
+                problems.AddBad(problem, rows.LineSpan);
+                return null;
+            case ProblemSeverity.Warning:
+                problems.Add(again);
+                return null;
+            default:
+                return again;
+        }
     }
 
     private static bool HoldsNothing(CsvRows rows)
@@ -102,6 +108,7 @@ internal sealed class SampleReading
             problems.Add(doubt);
         }
 
+        clock.Accept(time, rows.Line);
         samples.Add(time.ToUnixTimeMilliseconds(), readings.Values);
         return null;
     }

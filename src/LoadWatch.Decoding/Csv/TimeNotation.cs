@@ -30,18 +30,21 @@ internal abstract class TimeNotation
 
     public abstract bool TryRead(ReadOnlySpan<byte> cell, out WrittenTime time);
 
+    /// <summary>Only the years 1 to 9998, so that an offset, a zone or a year from the start never leads out of the calendar.</summary>
+    private static bool IsPlaceable(LocalDateTime local) => local.Year is >= 1 and <= 9998;
+
     protected static string Text(ReadOnlySpan<byte> cell) => cell.Length > 128 ? "" : Encoding.UTF8.GetString(cell);
 
     protected static bool TryRead(OffsetDateTimePattern pattern, string text, bool offsetStated, out WrittenTime time)
     {
-        var found = pattern.Parse(text).TryGetValue(default, out var value);
+        var found = pattern.Parse(text).TryGetValue(default, out var value) && IsPlaceable(value.LocalDateTime);
         time = found ? new(value.ToInstant(), offsetStated ? value.Offset : null, default) : default;
         return found;
     }
 
     protected static bool TryRead(LocalDateTimePattern pattern, string text, out WrittenTime time)
     {
-        var found = pattern.Parse(text).TryGetValue(default, out var value);
+        var found = pattern.Parse(text).TryGetValue(default, out var value) && IsPlaceable(value);
         time = new(null, null, value);
         return found;
     }
@@ -50,9 +53,9 @@ internal abstract class TimeNotation
 /// <summary>Seconds or milliseconds since 1970-01-01T00:00:00Z.</summary>
 internal sealed class UnixNotation(double millisecondsPerUnit, char decimalMark) : TimeNotation
 {
-    // Within the years 1 to 9999, so that every later calculation with the instant holds.
+    // The years 1 to 9998 again.
     private const double Earliest = -62_135_596_800_000;
-    private const double Latest = 253_402_300_799_999;
+    private const double Latest = 253_370_764_799_999;
 
     public override bool TryRead(ReadOnlySpan<byte> cell, out WrittenTime time)
     {

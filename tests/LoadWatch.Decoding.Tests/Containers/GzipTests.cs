@@ -100,7 +100,7 @@ public class GzipTests
         // The platform writes the CRC-32 of what it packs into the trailer.
         var crc = BinaryPrimitives.ReadUInt32LittleEndian(Packed.Gzip(header).AsSpan()[^8..]);
 
-        var member = Only([.. header, (byte)crc, (byte)(crc >> 8), .. plain[10..]], "ride.csv.gz");
+        var member = Only([.. header, (byte)(crc & 0xFF), (byte)((crc >> 8) & 0xFF), .. plain[10..]], "ride.csv.gz");
 
         Assert.Equal("ride.csv", member.Name);
         Assert.Equal(Packed.Ride, member.Bytes.ToArray());

@@ -11,6 +11,12 @@ internal static class Packed
 
     public static byte[] Gzip(byte[] content, CompressionLevel level = CompressionLevel.Optimal)
     {
+        if (content.Length == 0)
+        {
+            // The platform writes nothing at all for nothing; a member without content is a header, an empty block, and zeros (RFC 1952).
+            return [0x1F, 0x8B, 8, 0, 0, 0, 0, 0, 0, 3, 3, 0, 0, 0, 0, 0, 0, 0, 0, 0];
+        }
+
         var stream = new MemoryStream();
         using (var gzip = new GZipStream(stream, level))
         {

@@ -1,3 +1,5 @@
+using System.Text.Json;
+using System.Text.Json.Serialization;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Recordings;
 
@@ -6,6 +8,13 @@ namespace LoadWatch.Decoding.Tests.Csv;
 public class CsvLayoutTests
 {
     private static readonly CsvChannelColumn Power = new() { Column = "power_w", Channel = Channel.Power, Unit = "W" };
+
+    private static readonly JsonSerializerOptions Configuration = new()
+    {
+        PropertyNamingPolicy = JsonNamingPolicy.SnakeCaseLower,
+        UnmappedMemberHandling = JsonUnmappedMemberHandling.Disallow,
+        Converters = { new JsonStringEnumConverter(JsonNamingPolicy.SnakeCaseLower) },
+    };
 
     public static TheoryData<CsvLayout, string> Unusable() => new()
     {
@@ -57,6 +66,24 @@ public class CsvLayoutTests
         Assert.Empty(Good.Validate());
         Assert.Empty(BuiltInLayouts.Samples.Validate());
         Assert.Empty(CsvFiles.Finnish.Validate());
+    }
+
+    [Fact]
+    public void ALayoutIsWrittenInTheConfigurationWithTheseKeys()
+    {
+        const string Json = """
+            { "name": "bench", "kind": "samples", "header": ["t", "begin"], "delimiter": ";", "decimal": ",", "encoding": "utf-8",
+              "time": { "column": "t", "format": "seconds_from_start", "zone": "Europe/Helsinki", "start_column": "begin", "start_format": "unix_s" },
+              "columns": [{ "column": "v", "channel": "heart_rate", "unit": "bpm" }, { "column": "d", "channel": "distance", "unit": "km" }],
+              "sport_column": "what" }
+            """;
+        var layout = JsonSerializer.Deserialize<CsvLayout>(Json, Configuration)!;
+
+        Assert.Empty(layout.Validate());
+        var recording = CsvFiles.Only(CsvFiles.Decode("t;begin;v;d;what\n0,5;1791180000;142;1,5;rowing\n", layout));
+        Assert.Equal(1791180000500, recording.Samples.UnixMilliseconds[0]);
+        Assert.Equal((142, 1500), (recording.Samples[Channel.HeartRate][0], recording.Samples[Channel.Distance][0]));
+        Assert.Equal("rowing", recording.Sport.Name);
     }
 
     [Fact]
