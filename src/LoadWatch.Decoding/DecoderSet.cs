@@ -6,7 +6,8 @@ using LoadWatch.Recordings;
 namespace LoadWatch.Decoding;
 
 /// <summary>The one way from bytes to recordings: tells what a content is, whether it is whole, and decodes or unpacks it.</summary>
-/// <param name="layouts">The CSV layouts known, each without reasons from <see cref="CsvLayout.Validate"/>; <see cref="BuiltInLayouts"/> are not added.</param>
+/// <param name="layouts">The CSV layouts known, each without reasons from <see cref="CsvLayout.Validate"/>; <see cref="BuiltInLayouts"/>
+/// are not added.</param>
 /// <param name="limits">How much a container may hold; null for the defaults.</param>
 public sealed class DecoderSet(IReadOnlyList<CsvLayout> layouts, ContainerLimits? limits = null)
 {
@@ -32,7 +33,9 @@ public sealed class DecoderSet(IReadOnlyList<CsvLayout> layouts, ContainerLimits
         _ => head[..Math.Min(head.Length, HeadLength)].Contains((byte)0) ? ContentKind.Unknown : ContentKind.Text,
     };
 
-    /// <summary>A FIT file by size and CRC, a gzip file by its trailers, a zip file by its end record and directory; nothing else can tell.</summary>
+    /// <summary>
+    /// A FIT file by size and CRC, a gzip file by its trailers, a zip file by its end record and directory; nothing else can tell.
+    /// </summary>
     /// <param name="bytes">The whole content.</param>
     public Completeness CheckCompleteness(ReadOnlyMemory<byte> bytes) => Recognise(bytes.Span) switch
     {
@@ -77,7 +80,9 @@ public sealed class DecoderSet(IReadOnlyList<CsvLayout> layouts, ContainerLimits
     };
 
     private static string NameInside(string name) =>
-        name.Length > GzipEnding.Length && name.EndsWith(GzipEnding, StringComparison.OrdinalIgnoreCase) ? name[..^GzipEnding.Length] : name;
+        name.Length > GzipEnding.Length && name.EndsWith(GzipEnding, StringComparison.OrdinalIgnoreCase)
+            ? name[..^GzipEnding.Length]
+            : name;
 
     private static Completeness When(bool complete) => complete ? Completeness.Complete : Completeness.NeedsSettling;
 

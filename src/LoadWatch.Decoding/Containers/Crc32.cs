@@ -1,6 +1,8 @@
 namespace LoadWatch.Decoding.Containers;
 
-/// <summary>The CRC-32 of gzip and zip: polynomial 0x04C11DB7 reflected, start and final complement all ones (RFC 1952, section 8; ISO 3309).</summary>
+/// <summary>
+/// The CRC-32 of gzip and zip: polynomial 0x04C11DB7 reflected, start and final complement all ones (RFC 1952, section 8; ISO 3309).
+/// </summary>
 internal static class Crc32
 {
     private static readonly uint[] Table = [.. Enumerable.Range(0, 256).Select(Entry)];

@@ -4,7 +4,8 @@ using System.IO.Compression;
 namespace LoadWatch.Decoding.Containers;
 
 /// <summary>
-/// Reads gzip files (RFC 1952) with checks of our own, because the platform's stream takes a file cut in the middle for whole and passes over what
+/// Reads gzip files (RFC 1952) with checks of our own, because the platform's stream takes a file cut in the middle for whole and passes
+/// over what
 /// follows the last member. Every member must be whole: header, packed data, CRC-32 and size.
 /// </summary>
 internal static class Gzip
@@ -33,7 +34,8 @@ internal static class Gzip
         return new([new ContainerMember(name, output.ToMemory())], []);
     }
 
-    private static (int Position, string? Reason) ReadMember(ReadOnlyMemory<byte> bytes, int start, GrowingBytes output, ContainerLimits limits)
+    private static (int Position, string? Reason) ReadMember(
+        ReadOnlyMemory<byte> bytes, int start, GrowingBytes output, ContainerLimits limits)
     {
         if (GzipHeader.End(bytes.Span, start, out var reason) is not { } dataStart)
         {
@@ -49,7 +51,7 @@ internal static class Gzip
 
         return FindEnd(bytes.Span, dataStart, packed, output.From(before)) is { } end
             ? (end, null)
-            : (dataStart, "gzip data is cut or damaged: no trailer with the CRC-32 and size of what was unpacked, or other bytes behind it");
+            : (dataStart, "gzip data is cut or damaged, or other bytes follow it: no trailer fits what was unpacked");
     }
 
     private static string? Inflate(PackedBytes packed, GrowingBytes output, ContainerLimits limits)
@@ -81,7 +83,8 @@ internal static class Gzip
     }
 
     /// <summary>
-    /// Finds the trailer by its value, near where the inflater stopped reading: eight bytes that are the CRC-32 and size of what was unpacked, with
+    /// Finds the trailer by its value, near where the inflater stopped reading: eight bytes that are the CRC-32 and size of what was
+    /// unpacked, with
     /// nothing or another member behind them.
     /// </summary>
     private static int? FindEnd(ReadOnlySpan<byte> bytes, int dataStart, PackedBytes packed, ReadOnlySpan<byte> unpacked)

@@ -1,6 +1,9 @@
 namespace LoadWatch.Decoding.Containers;
 
-/// <summary>A read-only stream over a stretch of packed bytes that knows how far it was read, since the inflating stream does not say where it stopped.</summary>
+/// <summary>
+/// A read-only stream over a stretch of packed bytes that knows how far it was read, since the inflating stream does not say where it
+/// stopped.
+/// </summary>
 internal sealed class PackedBytes(ReadOnlyMemory<byte> bytes) : Stream
 {
     /// <summary>Where the last read began. The packed data ends behind it, but for the few bytes that the inflater may hold back.</summary>

@@ -4,7 +4,9 @@ using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Containers;
 
-/// <summary>Reads zip files with checks of our own: CRC-32, declared against real size, ratio, total, number of entries, overlaps.</summary>
+/// <summary>
+/// Reads zip files with checks of our own: CRC-32, declared against real size, ratio, total, number of entries, overlaps.
+/// </summary>
 internal static class Zip
 {
     private const int LocalHeaderLength = 30;
@@ -23,7 +25,8 @@ internal static class Zip
         var wanted = directory.Entries.Where(entry => !entry.IsFolder && !entry.IsHidden).ToList();
         return (wanted.Sum(entry => entry.PackedLength), wanted.Sum(entry => entry.Length)) switch
         {
-            var (packed, _) when packed > file.Length => Unpacked.Refused("entries overlap: together they are longer than the file", file.Length),
+            var (packed, _) when packed > file.Length =>
+                Unpacked.Refused("entries overlap: together they are longer than the file", file.Length),
             var (_, total) when total > limits.TotalBytes =>
                 Unpacked.Refused($"unpacks to {total} bytes, at most {limits.TotalBytes} are read", wanted[0].DirectoryAt),
             _ => new(wanted.Select(entry => Read(file, entry, limits)), []),
@@ -38,7 +41,7 @@ internal static class Zip
         var bytes = refusal is null ? Bytes(packed!.Value, entry, out refusal) : default;
         return refusal is null
             ? new ContainerMember(entry.Name, bytes)
-            : new ContainerMember(entry.Name, default, new Problem(ProblemSeverity.Error, refusal, ByteOffset: entry.HeaderAt, Field: entry.Name));
+            : new(entry.Name, default, new Problem(ProblemSeverity.Error, refusal, ByteOffset: entry.HeaderAt, Field: entry.Name));
     }
 
     private static string? Refusal(ZipEntry entry, ContainerLimits limits) => entry switch

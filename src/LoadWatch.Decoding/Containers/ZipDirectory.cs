@@ -3,7 +3,8 @@ using System.Buffers.Binary;
 namespace LoadWatch.Decoding.Containers;
 
 /// <summary>
-/// The central directory of a zip file (APPNOTE 6.3.10). Read here because the platform's reader checks no CRC, reads an entry no further than the size
+/// The central directory of a zip file (APPNOTE 6.3.10). Read here because the platform's reader checks no CRC, reads an entry no further
+/// than the size
 /// it declares, and makes all entries before they can be counted.
 /// </summary>
 internal sealed record ZipDirectory(IReadOnlyList<ZipEntry> Entries, string? Fault, long FaultAt)
@@ -47,7 +48,9 @@ internal sealed record ZipDirectory(IReadOnlyList<ZipEntry> Entries, string? Fau
             at = next;
         }
 
-        return at == end && entries.Count == count ? new(entries, null, 0) : Broken("the directory does not hold the number of entries stated", at);
+        return at == end && entries.Count == count
+            ? new(entries, null, 0)
+            : Broken("the directory does not hold the number of entries stated", at);
     }
 
     /// <summary>The end record whose comment reaches exactly to the end of the file.</summary>
@@ -56,7 +59,8 @@ internal sealed record ZipDirectory(IReadOnlyList<ZipEntry> Entries, string? Fau
         var first = Math.Max(0, file.Length - EndLength - CommentAtMost);
         for (var at = file.Length - EndLength; at >= first; at--)
         {
-            if (file[at..].StartsWith("PK\x5\x6"u8) && at + EndLength + BinaryPrimitives.ReadUInt16LittleEndian(file[(at + 20)..]) == file.Length)
+            var comment = BinaryPrimitives.ReadUInt16LittleEndian(file[(at + 20)..]);
+            if (file[at..].StartsWith("PK\x5\x6"u8) && at + EndLength + comment == file.Length)
             {
                 return at;
             }

@@ -20,7 +20,8 @@ internal sealed record ZipEntry(
     public bool IsFolder => Name.EndsWith('/') || Name.EndsWith('\\');
 
     /// <summary>A leftover of a file manager, or hidden: not meant as a member.</summary>
-    public bool IsHidden => Array.Exists(Name.Split('/', '\\'), part => part == "__MACOSX" || (part.StartsWith('.') && part is not "." and not ".."));
+    public bool IsHidden => Array.Exists(
+        Name.Split('/', '\\'), part => part == "__MACOSX" || (part.StartsWith('.') && part is not ("." or "..")));
 
     /// <summary>Null where no whole entry stands; <paramref name="next"/> is where the following one begins.</summary>
     public static ZipEntry? ReadAt(ReadOnlySpan<byte> file, int at, int end, out int next)
@@ -35,7 +36,15 @@ internal sealed record ZipEntry(
         var nameLength = U16(entry, 28);
         next = at + FixedLength + nameLength + U16(entry, 30) + U16(entry, 32);
         return next > end ? null : new ZipEntry(
-            Label(entry.Slice(FixedLength, nameLength)), U16(entry, 8), U16(entry, 10), U32(entry, 16), U32(entry, 20), U32(entry, 24), U32(entry, 42), Link(entry), at);
+            Label(entry.Slice(FixedLength, nameLength)),
+            Flags: U16(entry, 8),
+            Method: U16(entry, 10),
+            Crc: U32(entry, 16),
+            PackedLength: U32(entry, 20),
+            Length: U32(entry, 24),
+            HeaderAt: U32(entry, 42),
+            IsLink: Link(entry),
+            DirectoryAt: at);
     }
 
     private static bool Link(ReadOnlySpan<byte> entry) => entry[5] == UnixHost && ((U32(entry, 38) >> 16) & UnixKind) == UnixLink;

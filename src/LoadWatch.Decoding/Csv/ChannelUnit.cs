@@ -2,7 +2,9 @@ using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Csv;
 
-/// <summary>How a unit of a layout becomes the unit of the channel: the value times <paramref name="Times"/>, over <paramref name="Over"/>.</summary>
+/// <summary>
+/// How a unit of a layout becomes the unit of the channel: the value times <paramref name="Times"/>, over <paramref name="Over"/>.
+/// </summary>
 internal readonly record struct ChannelUnit(double Times, double Over)
 {
     private static readonly ChannelUnit Same = new(1, 1);

@@ -22,7 +22,10 @@ public sealed record CsvLayout
     /// <summary>What the rows are. Default <c>samples</c>.</summary>
     public CsvKind Kind { get; init; } = CsvKind.Samples;
 
-    /// <summary>The signature: column names that must all be present. Of several layouts that fit, the one with the longest signature wins. No default.</summary>
+    /// <summary>
+    /// The signature: column names that must all be present. Of several layouts that fit, the one with the longest signature wins. No
+    /// default.
+    /// </summary>
     public IReadOnlyList<string> Header { get; init; } = [];
 
     /// <summary>The character between two fields. Default a comma. A first line <c>sep=;</c> in the file goes before it.</summary>
@@ -33,7 +36,8 @@ public sealed record CsvLayout
     public char Decimal { get; init; } = '.';
 
     /// <summary>
-    /// <c>auto</c>, <c>utf-8</c>, <c>utf-16</c> (little endian) or <c>windows-1252</c>. Default <c>auto</c>: UTF-8 where the bytes are valid
+    /// <c>auto</c>, <c>utf-8</c>, <c>utf-16</c> (little endian) or <c>windows-1252</c>. Default <c>auto</c>: UTF-8 where the bytes are
+    /// valid
     /// UTF-8, else Windows-1252. A byte order mark in the file goes before it.
     /// </summary>
     public string Encoding { get; init; } = CsvText.Auto;
@@ -44,10 +48,15 @@ public sealed record CsvLayout
     /// <summary>The columns that hold readings. One that is not in <see cref="Header"/> may be absent from a file. No default.</summary>
     public IReadOnlyList<CsvChannelColumn> Columns { get; init; } = [];
 
-    /// <summary>The sport of every file, in the words of the FIT profile (<c>cycling</c>). Default null: see <see cref="SportColumn"/>.</summary>
+    /// <summary>
+    /// The sport of every file, in the words of the FIT profile (<c>cycling</c>). Default null: see <see cref="SportColumn"/>.
+    /// </summary>
     public string? Sport { get; init; }
 
-    /// <summary>The column whose first filled cell names the sport; may be absent from a file. Default null; without either the sport is <c>generic</c>.</summary>
+    /// <summary>
+    /// The column whose first filled cell names the sport; may be absent from a file. Default null; without either the sport is
+    /// <c>generic</c>.
+    /// </summary>
     public string? SportColumn { get; init; }
 
     /// <summary>Why this layout cannot be used, one sentence each; empty when it can.</summary>
@@ -71,10 +80,14 @@ public sealed record CsvTimeColumn
     /// </summary>
     public string Format { get; init; } = Iso8601;
 
-    /// <summary>The IANA zone of local times (<c>Europe/Helsinki</c>). Default null: UTC. An offset written in the cell goes before it.</summary>
+    /// <summary>
+    /// The IANA zone of local times (<c>Europe/Helsinki</c>). Default null: UTC. An offset written in the cell goes before it.
+    /// </summary>
     public string? Zone { get; init; }
 
-    /// <summary>For <c>seconds_from_start</c>: the column that holds the start of the session; the first filled cell counts. Default null.</summary>
+    /// <summary>
+    /// For <c>seconds_from_start</c>: the column that holds the start of the session; the first filled cell counts. Default null.
+    /// </summary>
     public string? StartColumn { get; init; }
 
     /// <summary>How the start is written: any format but <c>seconds_from_start</c>. Default <c>iso8601</c>.</summary>
@@ -90,6 +103,8 @@ public sealed record CsvChannelColumn
     /// <summary>The channel. Default <c>heart_rate</c>.</summary>
     public Channel Channel { get; init; }
 
-    /// <summary>The unit of the cells: <c>bpm</c>, <c>W</c>, <c>m/s</c> or <c>km/h</c>, <c>rpm</c>, <c>m</c> or <c>km</c>. No default.</summary>
+    /// <summary>
+    /// The unit of the cells: <c>bpm</c>, <c>W</c>, <c>m/s</c> or <c>km/h</c>, <c>rpm</c>, <c>m</c> or <c>km</c>. No default.
+    /// </summary>
     public string Unit { get; init; } = "";
 }

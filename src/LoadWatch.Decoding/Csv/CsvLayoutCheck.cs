@@ -34,7 +34,8 @@ internal static class CsvLayoutCheck
         }
     }
 
-    private static bool IsDelimiter(char mark) => mark == '\t' || (mark is > ' ' and < '\x7f' && !char.IsAsciiLetterOrDigit(mark) && !"\"'.+-:".Contains(mark));
+    private static bool IsDelimiter(char mark) =>
+        mark == '\t' || (mark is > ' ' and < '\x7f' && !char.IsAsciiLetterOrDigit(mark) && !"\"'.+-:".Contains(mark));
 
     private static IEnumerable<string> Header(CsvLayout layout)
     {

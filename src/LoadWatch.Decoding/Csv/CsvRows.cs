@@ -5,7 +5,8 @@ using LoadWatch.Recordings;
 namespace LoadWatch.Decoding.Csv;
 
 /// <summary>
-/// The rows of a text, one at a time, the first line among them; empty lines are passed over. Stops with a <see cref="Fault"/> where going on
+/// The rows of a text, one at a time, the first line among them; empty lines are passed over. Stops with a <see cref="Fault"/> where going
+/// on
 /// could give wrong rows.
 /// </summary>
 internal sealed class CsvRows : IDisposable

@@ -6,7 +6,8 @@ namespace LoadWatch.Decoding.Csv;
 public static class CsvSamplesDecoder
 {
     /// <summary>
-    /// Picks the layout by the file's column names and reads every row by it. A row with a bad cell is a problem with its line, column and field, and
+    /// Picks the layout by the file's column names and reads every row by it. A row with a bad cell is a problem with its line, column and
+    /// field, and
     /// the others count; with more than 1 % bad rows, or no good one, the file gives no recording.
     /// </summary>
     /// <param name="bytes">The whole file.</param>

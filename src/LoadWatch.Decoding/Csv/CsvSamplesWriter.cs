@@ -9,11 +9,14 @@ namespace LoadWatch.Decoding.Csv;
 /// <summary>Writes the format of <see cref="BuiltInLayouts.Samples"/>: the same recording always gives the same bytes.</summary>
 public static class CsvSamplesWriter
 {
-    private static readonly OffsetDateTimePattern TimePattern = OffsetDateTimePattern.CreateWithInvariantCulture("uuuu'-'MM'-'dd'T'HH':'mm':'ss;FFFo<+HH:mm>");
-    private static readonly InstantPattern UtcPattern = InstantPattern.CreateWithInvariantCulture("uuuu'-'MM'-'dd'T'HH':'mm':'ss;FFF'Z'");
+    private const string Moment = "uuuu'-'MM'-'dd'T'HH':'mm':'ss;FFF";
+
+    private static readonly OffsetDateTimePattern LocalPattern = OffsetDateTimePattern.CreateWithInvariantCulture(Moment + "o<+HH:mm>");
+    private static readonly InstantPattern UtcPattern = InstantPattern.CreateWithInvariantCulture(Moment + "'Z'");
 
     /// <summary>
-    /// UTF-8 without a byte order mark, lines ended by LF, only the channels that hold a reading. Times carry the recording's local offset to the
+    /// UTF-8 without a byte order mark, lines ended by LF, only the channels that hold a reading. Times carry the recording's local offset
+    /// to the
     /// minute, or <c>Z</c>. Undated rows are left out.
     /// </summary>
     public static byte[] Write(Recording recording)
@@ -21,7 +24,8 @@ public static class CsvSamplesWriter
         ArgumentNullException.ThrowIfNull(recording);
         var columns = BuiltInLayouts.SampleColumns.Where(column => recording.Samples.Has(column.Channel)).ToList();
         var text = new StringBuilder();
-        text.AppendJoin(',', columns.Select(column => column.Column).Prepend(BuiltInLayouts.SportColumn).Prepend(BuiltInLayouts.TimeColumn)).Append('\n');
+        text.AppendJoin(',', [BuiltInLayouts.TimeColumn, BuiltInLayouts.SportColumn, .. columns.Select(column => column.Column)]);
+        text.Append('\n');
         for (var row = 0; row < recording.Samples.Count; row++)
         {
             AppendRow(text, recording, columns, row);
@@ -49,5 +53,5 @@ public static class CsvSamplesWriter
     }
 
     private static string Written(Instant time, Offset? offset) =>
-        offset is { } local ? TimePattern.Format(time.WithOffset(local)) : UtcPattern.Format(time);
+        offset is { } local ? LocalPattern.Format(time.WithOffset(local)) : UtcPattern.Format(time);
 }

@@ -28,7 +28,8 @@ internal sealed record LayoutChoice(CsvLayout? Layout, CsvTable? Table, Problem?
         layout.Validate() is [var reason, ..] ? $"layout '{layout.Name}' cannot be used: {reason}" : null;
 
     private static Dictionary<(string, char), CsvTable> Tables(ReadOnlyMemory<byte> bytes, IReadOnlyList<CsvLayout> layouts) =>
-        layouts.Select(Dialect).Distinct().ToDictionary(dialect => dialect, dialect => CsvTable.Open(bytes, dialect.Encoding, dialect.Delimiter));
+        layouts.Select(Dialect).Distinct().ToDictionary(
+            dialect => dialect, dialect => CsvTable.Open(bytes, dialect.Encoding, dialect.Delimiter));
 
     private static (string Encoding, char Delimiter) Dialect(CsvLayout layout) => (layout.Encoding, layout.Delimiter);
 
@@ -47,7 +48,7 @@ internal sealed record LayoutChoice(CsvLayout? Layout, CsvTable? Table, Problem?
     }
 
     private static IEnumerable<string?> UsedColumns(CsvLayout layout) =>
-        layout.Columns.Select(column => (string?)column.Column).Append(layout.Time.Column).Append(layout.Time.StartColumn).Append(layout.SportColumn);
+        [.. layout.Columns.Select(column => column.Column), layout.Time.Column, layout.Time.StartColumn, layout.SportColumn];
 
     private static Problem NoneFits(IEnumerable<CsvTable> tables, IReadOnlyList<CsvLayout> layouts)
     {

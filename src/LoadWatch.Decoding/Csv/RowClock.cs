@@ -85,7 +85,9 @@ internal sealed class RowClock
         }
         else if (Moment(rows, column, before: null, out problem) is { } start)
         {
-            problem = start == (sessionStart ??= start) ? null : table.Wrong(rows, column, "another start than in the rows above: one file holds one session");
+            problem = start == (sessionStart ??= start)
+                ? null
+                : table.Wrong(rows, column, "another start than in the rows above: one file holds one session");
         }
 
         return problem is null;
@@ -105,5 +107,10 @@ internal sealed class RowClock
     }
 
     private Problem Warning(LineCount lines, string reason) =>
-        new(ProblemSeverity.Warning, lines.Count == 1 ? reason : $"{reason} ({lines.Count} rows)", Line: lines.First, Column: timeColumn + 1, Field: table.Names[timeColumn]);
+        new(
+            ProblemSeverity.Warning,
+            lines.Count == 1 ? reason : $"{reason} ({lines.Count} rows)",
+            Line: lines.First,
+            Column: timeColumn + 1,
+            Field: table.Names[timeColumn]);
 }

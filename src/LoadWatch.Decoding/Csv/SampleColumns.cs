@@ -3,7 +3,8 @@ using LoadWatch.Recordings;
 namespace LoadWatch.Decoding.Csv;
 
 /// <summary>
-/// Fills the columns of a series. They are made once, for as many rows as the file has lines, so memory is what the readings need; a channel without
+/// Fills the columns of a series. They are made once, for as many rows as the file has lines, so memory is what the readings need; a
+/// channel without
 /// a reading takes none.
 /// </summary>
 internal sealed class SampleColumns(int rowsAtMost)

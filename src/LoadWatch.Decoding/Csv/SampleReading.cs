@@ -124,14 +124,16 @@ internal sealed class SampleReading
         {
             if (!rows[index].IsEmpty)
             {
-                return Refusal($"{rows.CellCount} cells for {table.Names.Count} columns", rows.Line);
+                return WrongCount(rows);
             }
         }
 
-        return rows.CellCount < table.Names.Count ? Refusal($"{rows.CellCount} cells for {table.Names.Count} columns", rows.Line) : null;
+        return rows.CellCount < table.Names.Count ? WrongCount(rows) : null;
     }
 
-    /// <summary>For a row of column names in the middle: a warning where they are those of the first line, an error where they are others.</summary>
+    /// <summary>
+    /// For a row of column names in the middle: a warning where they are those of the first line, an error where they are others.
+    /// </summary>
     private Problem? NamesAgain(CsvRows rows)
     {
         var cells = Enumerable.Range(0, rows.CellCount).Select(rows.Text).ToList();
@@ -139,7 +141,8 @@ internal sealed class SampleReading
         {
             _ when !cells.Contains(layout.Time.Column) => null,
             _ when cells.SequenceEqual(table.Names) =>
-                new Problem(ProblemSeverity.Warning, "the column names come again: rows above and below are taken as one session", Line: rows.Line),
+                Refusal("the column names come again: rows above and below are taken as one session", rows.Line)
+                    with { Severity = ProblemSeverity.Warning },
             _ => Refusal("other column names begin here: two files in one", rows.Line),
         };
     }
@@ -151,7 +154,8 @@ internal sealed class SampleReading
         {
             0 when all == 0 => Refusal("no rows below the column names", table.Line ?? 1),
             0 => new Problem(ProblemSeverity.Error, $"none of {all} rows can be used"),
-            _ when problems.BadLines * 100 > all => new Problem(ProblemSeverity.Error, $"{problems.BadLines} of {all} rows cannot be used, more than 1 %"),
+            _ when problems.BadLines * 100 > all =>
+                new Problem(ProblemSeverity.Error, $"{problems.BadLines} of {all} rows cannot be used, more than 1 %"),
             _ => null,
         };
     }
@@ -169,6 +173,8 @@ internal sealed class SampleReading
             Samples = series,
         };
     }
+
+    private Problem WrongCount(CsvRows rows) => Refusal($"{rows.CellCount} cells for {table.Names.Count} columns", rows.Line);
 
     private static Problem Refusal(string reason, long line) => new(ProblemSeverity.Error, reason, Line: line);
 }

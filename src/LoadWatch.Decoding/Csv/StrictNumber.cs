@@ -52,7 +52,8 @@ internal static class StrictNumber
         return rest.IsEmpty;
     }
 
-    private static ReadOnlySpan<byte> AfterSign(ReadOnlySpan<byte> text) => !text.IsEmpty && text[0] is (byte)'+' or (byte)'-' ? text[1..] : text;
+    private static ReadOnlySpan<byte> AfterSign(ReadOnlySpan<byte> text) =>
+        !text.IsEmpty && text[0] is (byte)'+' or (byte)'-' ? text[1..] : text;
 
     private static bool TakeDigits(ref ReadOnlySpan<byte> text)
     {

@@ -77,7 +77,8 @@ internal sealed class UnixNotation(double millisecondsPerUnit, char decimalMark)
 }
 
 /// <summary>
-/// ISO 8601, extended format with seconds, a fraction after a full stop or comma, with <c>Z</c>, an offset, or neither; a blank may stand for the T.
+/// ISO 8601, extended format with seconds, a fraction after a full stop or comma, with <c>Z</c>, an offset, or neither; a blank may stand
+/// for the T.
 /// <c>Z</c> states UTC, not the offset of the place.
 /// </summary>
 internal sealed class IsoNotation : TimeNotation
@@ -147,7 +148,9 @@ internal sealed class PatternNotation : TimeNotation
         }
     }
 
-    /// <summary>Writes a moment of an afternoon and reads it again: a pattern that loses the year or the half of the day does not give it back.</summary>
+    /// <summary>
+    /// Writes a moment of an afternoon and reads it again: a pattern that loses the year or the half of the day does not give it back.
+    /// </summary>
     public static string? Complain(string format)
     {
         try

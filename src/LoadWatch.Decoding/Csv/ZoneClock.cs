@@ -3,7 +3,8 @@ using NodaTime;
 namespace LoadWatch.Decoding.Csv;
 
 /// <summary>
-/// Places local times in a zone. A time that the clocks skipped moves on by the length of the gap; one that came twice is the earlier, unless the
+/// Places local times in a zone. A time that the clocks skipped moves on by the length of the gap; one that came twice is the earlier,
+/// unless the
 /// rows would then run backwards. Both are counted, with the first line of each.
 /// </summary>
 internal sealed class ZoneClock(DateTimeZone zone)
