@@ -45,7 +45,17 @@ internal static class Some
         [new EvidenceItem("acute", 812.5, "AU"), new EvidenceItem("maximal heart rate", null, "bpm", "never measured; Größe > 0")]);
 
     public static Finding Finding(LocalDate date) => new(
-        "anna", date, "stimulus_gap", BodyRegion.Legs, Severity.Warning, date.PlusDays(-3), 14, 0.1 + 0.2, "days", "no heavy work for 14 days", Evidence);
+        "anna",
+        date,
+        "stimulus_gap",
+        BodyRegion.Legs,
+        Severity.Warning,
+        Since: date.PlusDays(-3),
+        Value: 14,
+        Limit: 0.1 + 0.2,
+        "days",
+        "no heavy work for 14 days",
+        Evidence);
 
     public static Alert Alert(string person = "anna") => new(
         new FindingKey(person, "load_ratio", null), Date, Date.PlusDays(2), AlertState.Unacknowledged, Severity.Notice, "well above the usual");

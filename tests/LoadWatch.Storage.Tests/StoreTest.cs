@@ -1,15 +1,23 @@
-using LoadWatch.Storage.Recordings;
-
 namespace LoadWatch.Storage.Tests;
 
-/// <summary>A real database in a folder of its own.</summary>
-public abstract class StoreTest : IDisposable
+/// <summary>A data folder that the tests of one class use one after another.</summary>
+public sealed class SharedFolder : IDisposable
 {
     private readonly TemporaryFolder temporary = new();
 
-    protected StoreTest()
+    public SharedFolder() => Data = DataFolder.Open(temporary.At("data"));
+
+    public DataFolder Data { get; }
+
+    public void Dispose() => temporary.Dispose();
+}
+
+/// <summary>A real database, new for each test.</summary>
+public abstract class StoreTest : IClassFixture<SharedFolder>, IDisposable
+{
+    protected StoreTest(SharedFolder shared)
     {
-        Folder = DataFolder.Open(temporary.At("data"));
+        Folder = shared.Data;
         Store = Store.Open(Folder);
     }
 
@@ -27,7 +35,11 @@ public abstract class StoreTest : IDisposable
     public void Dispose()
     {
         Store.Dispose();
-        temporary.Dispose();
+        foreach (var file in Directory.GetFiles(Folder.Root, "loadwatch.db*"))
+        {
+            File.Delete(file);
+        }
+
         GC.SuppressFinalize(this);
     }
 }

@@ -4,7 +4,7 @@ using Microsoft.Data.Sqlite;
 
 namespace LoadWatch.Storage.Tests;
 
-public sealed class StoreTests : StoreTest
+public sealed class StoreTests(SharedFolder shared) : StoreTest(shared)
 {
     [Fact]
     public void AnExceptionTakesBackEverythingOfItsTransaction()

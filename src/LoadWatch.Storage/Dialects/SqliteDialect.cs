@@ -27,7 +27,13 @@ public sealed class SqliteDialect : Dialect
         this.path = path;
 
         // The provider retries a busy database itself until this timeout (seconds); the engine's own setting would come on top.
-        connectionString = new SqliteConnectionStringBuilder { DataSource = path, DefaultTimeout = 5, ForeignKeys = true, Pooling = false }.ConnectionString;
+        connectionString = new SqliteConnectionStringBuilder
+        {
+            DataSource = path,
+            DefaultTimeout = 5,
+            ForeignKeys = true,
+            Pooling = false,
+        }.ConnectionString;
     }
 
     public override string ClaimClause => "";

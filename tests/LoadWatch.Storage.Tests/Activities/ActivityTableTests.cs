@@ -9,7 +9,8 @@ namespace LoadWatch.Storage.Tests.Activities;
 
 public sealed class ActivityTableTests : StoreTest
 {
-    public ActivityTableTests()
+    public ActivityTableTests(SharedFolder shared)
+        : base(shared)
     {
         AddRecording(1);
         AddRecording(2);
@@ -136,7 +137,17 @@ public sealed class ActivityTableTests : StoreTest
             Quantities = [Some.Quantity(QuantityNames.BanisterTrimp, 81.25), new Quantity(QuantityNames.Minutes, 60, "min", Estimated: false)],
             Stimulus =
             [
-                new RegionStimulus(BodyRegion.Legs, Grade.A, "power", new Band(1, 2, 3), new Band(4, 5, 6), 7, new Band(8, 9, 10), new Band(11, 12, 13), new Band(14, 15, 16.5), ["maximal power"]),
+                new RegionStimulus(
+                    BodyRegion.Legs,
+                    Grade.A,
+                    "power",
+                    HardBouts: new Band(1, 2, 3),
+                    HardRepetitions: new Band(4, 5, 6),
+                    HardSets: 7,
+                    SlowSeconds: new Band(8, 9, 10),
+                    MediumSeconds: new Band(11, 12, 13),
+                    LargeSeconds: new Band(14, 15, 16.5),
+                    NotSeen: ["maximal power"]),
                 new RegionStimulus(BodyRegion.Trunk, Grade.E, "heart_rate", null, null, null, null, null, null, []),
             ],
             Remarks = ["heart rate usable in 12 % of the time: no heart-rate load"],

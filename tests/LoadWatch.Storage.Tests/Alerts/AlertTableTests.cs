@@ -5,7 +5,7 @@ using Microsoft.Data.Sqlite;
 
 namespace LoadWatch.Storage.Tests.Alerts;
 
-public sealed class AlertTableTests : StoreTest
+public sealed class AlertTableTests(SharedFolder shared) : StoreTest(shared)
 {
     [Fact]
     public void AnAlertIsReadAsItWasWritten()
@@ -24,7 +24,13 @@ public sealed class AlertTableTests : StoreTest
     [Fact]
     public void AnAlertPutAgainReplacesTheFirst()
     {
-        var changed = Some.Alert() with { State = AlertState.Acknowledged, Judged = Some.Date.PlusDays(9), Severity = Severity.Warning, Text = "higher" };
+        var changed = Some.Alert() with
+        {
+            State = AlertState.Acknowledged,
+            Judged = Some.Date.PlusDays(9),
+            Severity = Severity.Warning,
+            Text = "higher",
+        };
         Store.Write(session => session.Alerts.Put(Some.Alert()));
         Store.Write(session => session.Alerts.Put(changed));
 

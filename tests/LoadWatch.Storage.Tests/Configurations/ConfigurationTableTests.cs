@@ -2,7 +2,7 @@ using LoadWatch.Storage.Audits;
 
 namespace LoadWatch.Storage.Tests.Configurations;
 
-public sealed class ConfigurationTableTests : StoreTest
+public sealed class ConfigurationTableTests(SharedFolder shared) : StoreTest(shared)
 {
     [Fact]
     public void AConfigurationThatComesBackIsTheLatestAgain()

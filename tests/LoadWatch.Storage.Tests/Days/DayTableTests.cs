@@ -3,7 +3,7 @@ using LoadWatch.Stimulus;
 
 namespace LoadWatch.Storage.Tests.Days;
 
-public sealed class DayTableTests : StoreTest
+public sealed class DayTableTests(SharedFolder shared) : StoreTest(shared)
 {
     private static readonly IReadOnlyDictionary<BodyRegion, RegionDay> None = new Dictionary<BodyRegion, RegionDay>();
 

@@ -5,8 +5,8 @@ using System.Reflection.PortableExecutable;
 namespace LoadWatch.Storage.Tests.Dialects;
 
 /// <summary>
-/// One statement per command: the SQLite provider reports no error of a statement that follows one which returned rows. Every text that the compiled
-/// assembly holds is looked at, so no statement can be missed.
+/// One statement per command: the SQLite provider reports no error of a statement that follows one which returned rows. Every text that the
+/// compiled assembly holds is looked at, so no statement can be missed.
 /// </summary>
 public sealed class SqlTextTests
 {
@@ -23,7 +23,9 @@ public sealed class SqlTextTests
 
     [Fact]
     public void TransactionsAreNeverBegunOrEndedByText() =>
-        Assert.DoesNotContain(TextsOf(typeof(Store).Assembly.Location), text => text.StartsWith("BEGIN", StringComparison.Ordinal) || text.StartsWith("COMMIT", StringComparison.Ordinal));
+        Assert.DoesNotContain(
+            TextsOf(typeof(Store).Assembly.Location),
+            text => text.StartsWith("BEGIN", StringComparison.Ordinal) || text.StartsWith("COMMIT", StringComparison.Ordinal));
 
     [Fact]
     public void ASecondStatementWouldBeFound()

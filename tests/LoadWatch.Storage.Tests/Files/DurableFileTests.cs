@@ -8,24 +8,28 @@ public sealed class DurableFileTests : IDisposable
 
     public void Dispose() => temporary.Dispose();
 
-    [Fact]
-    public void AFreeNameIsTaken()
+    public static TheoryData<bool> InOneStepOrByLink => OperatingSystem.IsLinux() ? [true, false] : [true];
+
+    [Theory]
+    [MemberData(nameof(InOneStepOrByLink))]
+    public void AFreeNameIsTaken(bool inOneStep)
     {
         File.WriteAllText(temporary.At("from"), "new");
 
-        Assert.True(DurableFile.RenameWithoutOverwrite(temporary.At("from"), temporary.At("to")));
+        Assert.True(Rename(inOneStep));
 
         Assert.False(File.Exists(temporary.At("from")));
         Assert.Equal("new", File.ReadAllText(temporary.At("to")));
     }
 
-    [Fact]
-    public void ATakenNameIsLeftAlone()
+    [Theory]
+    [MemberData(nameof(InOneStepOrByLink))]
+    public void ATakenNameIsLeftAlone(bool inOneStep)
     {
         File.WriteAllText(temporary.At("from"), "new");
         File.WriteAllText(temporary.At("to"), "old");
 
-        Assert.False(DurableFile.RenameWithoutOverwrite(temporary.At("from"), temporary.At("to")));
+        Assert.False(Rename(inOneStep));
 
         Assert.Equal("new", File.ReadAllText(temporary.At("from")));
         Assert.Equal("old", File.ReadAllText(temporary.At("to")));
@@ -47,4 +51,8 @@ public sealed class DurableFileTests : IDisposable
 
         Assert.Throws<IOException>(() => DurableFile.SyncFolder(temporary.At("none")));
     }
+
+    private bool Rename(bool inOneStep) => inOneStep
+        ? DurableFile.RenameWithoutOverwrite(temporary.At("from"), temporary.At("to"))
+        : DurableFile.RenameByLink(temporary.At("from"), temporary.At("to"));
 }

@@ -3,14 +3,15 @@ using LoadWatch.Stimulus;
 
 namespace LoadWatch.Storage.Tests.Findings;
 
-public sealed class FindingTableTests : StoreTest
+public sealed class FindingTableTests(SharedFolder shared) : StoreTest(shared)
 {
     private static readonly Evidence None = new("", "", []);
 
     [Fact]
     public void AFindingIsReadAsItWasWrittenWithItsEvidence()
     {
-        Finding[] written = [Some.Finding(Some.Date), Some.Finding(Some.Date) with { Rule = "load_ratio", Region = null, Severity = Severity.Notice }];
+        var ofLegs = Some.Finding(Some.Date);
+        Finding[] written = [ofLegs, ofLegs with { Rule = "load_ratio", Region = null, Severity = Severity.Notice }];
         Store.Write(session => session.Findings.Replace("anna", Some.Date, written));
 
         var read = Store.Read(session => session.Findings.OfPerson("anna"));

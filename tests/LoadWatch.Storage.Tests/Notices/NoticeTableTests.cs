@@ -3,7 +3,7 @@ using LoadWatch.Storage.Notices;
 
 namespace LoadWatch.Storage.Tests.Notices;
 
-public sealed class NoticeTableTests : StoreTest
+public sealed class NoticeTableTests(SharedFolder shared) : StoreTest(shared)
 {
     private static readonly Delivery Mail = new("mail", "coach@example.org");
     private static readonly Delivery File = new("file", "coach");

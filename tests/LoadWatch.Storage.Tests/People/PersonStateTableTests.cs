@@ -2,7 +2,7 @@ using LoadWatch.Storage.People;
 
 namespace LoadWatch.Storage.Tests.People;
 
-public sealed class PersonStateTableTests : StoreTest
+public sealed class PersonStateTableTests(SharedFolder shared) : StoreTest(shared)
 {
     [Fact]
     public void TheEarliestDateAskedForStays()

@@ -3,7 +3,7 @@ using LoadWatch.Storage.Recordings;
 
 namespace LoadWatch.Storage.Tests.Recordings;
 
-public sealed class ArrivalTableTests : StoreTest
+public sealed class ArrivalTableTests(SharedFolder shared) : StoreTest(shared)
 {
     [Fact]
     public void ANewArrivalWaits()

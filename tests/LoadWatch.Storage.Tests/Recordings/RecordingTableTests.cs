@@ -2,7 +2,7 @@ using NodaTime;
 
 namespace LoadWatch.Storage.Tests.Recordings;
 
-public sealed class RecordingTableTests : StoreTest
+public sealed class RecordingTableTests(SharedFolder shared) : StoreTest(shared)
 {
     [Fact]
     public void ARecordingIsReadAsItWasWritten()

@@ -4,7 +4,7 @@ using NodaTime;
 
 namespace LoadWatch.Storage.Tests.Recordings;
 
-public sealed class SightingTableTests : StoreTest
+public sealed class SightingTableTests(SharedFolder shared) : StoreTest(shared)
 {
     private static readonly FileStamp Stamp = new(1234, 1_772_350_200_250, "8.1:77");
 

@@ -6,8 +6,13 @@ using Microsoft.Data.Sqlite;
 namespace LoadWatch.Storage.Tests.Schema;
 
 /// <summary>The schema is a contract: a change of it is a new script and shows here as a difference to read.</summary>
-public sealed class SchemaTests : StoreTest
+public sealed class SchemaTests(SharedFolder shared) : StoreTest(shared)
 {
+    private const string Objects = """
+        SELECT type, name, sql FROM sqlite_master
+        WHERE sql IS NOT NULL AND name NOT LIKE 'sqlite%' AND name <> 'schema_version' ORDER BY type DESC, name
+        """;
+
     [Fact]
     public void TheSchemaIsTheAcceptedOne()
     {
@@ -21,7 +26,8 @@ public sealed class SchemaTests : StoreTest
     {
         var types = Describe().Split('\n').Where(line => line.StartsWith("  ", StringComparison.Ordinal)).Select(line => line.Split(": ")[1]);
 
-        Assert.All(types, type => Assert.Contains(type.Replace(" required", "", StringComparison.Ordinal), (string[])["TEXT", "BIGINT", "DOUBLE PRECISION", "BLOB"]));
+        string[] known = ["TEXT", "BIGINT", "DOUBLE PRECISION", "BLOB"];
+        Assert.All(types, type => Assert.Contains(type.Replace(" required", "", StringComparison.Ordinal), known));
     }
 
     // An error behind the first statement of a command can vanish; a line with a semicolon alone begins a new command.
@@ -41,11 +47,9 @@ public sealed class SchemaTests : StoreTest
         using var connection = new SqliteConnection($"Data Source={Folder.DatabasePath};Pooling=False");
         connection.Open();
         var text = new StringBuilder();
-        var objects = connection.Query<(string Type, string Name, string Sql)>(
-            "SELECT type, name, sql FROM sqlite_master WHERE sql IS NOT NULL AND name NOT LIKE 'sqlite%' AND name <> 'schema_version' ORDER BY type DESC, name");
-        foreach (var (type, name, sql) in objects)
+        foreach (var (type, name, sql) in connection.Query<(string Type, string Name, string Sql)>(Objects))
         {
-            text.Append(type == "table" ? $"{name} ({Key(connection, name)})\n" : string.Join(' ', sql.Split((char[]?)null, StringSplitOptions.RemoveEmptyEntries)) + "\n");
+            text.Append(type == "table" ? $"{name} ({Key(connection, name)})" : sql.Trim()).Append('\n');
             foreach (var column in Columns(connection, name))
             {
                 text.Append(column);
