@@ -3,8 +3,8 @@ using LoadWatch.Activities;
 namespace LoadWatch.Storage.Activities;
 
 /// <summary>
-/// A histogram as bytes: for each bin, ascending, its distance from the bin before (the first from 0) and its milliseconds, both in groups of seven bits,
-/// lowest first, the high bit saying that more follow. Distances are folded so that a negative first bin is short too.
+/// A histogram as bytes: for each bin, ascending, its distance from the bin before (the first from 0) and its milliseconds, both in groups of
+/// seven bits, lowest first, the high bit saying that more follow. Distances are folded so that a negative first bin is short too.
 /// </summary>
 public static class HistogramCodec
 {

@@ -5,7 +5,9 @@ using NodaTime;
 
 namespace LoadWatch.Storage.Alerts;
 
-/// <summary>Table <c>alert_change</c>: appended to, never changed. Positions count through the changes of all alerts in the order of their commits.</summary>
+/// <summary>
+/// Table <c>alert_change</c>: appended to, never changed. Positions count through the changes of all alerts in the order of their commits.
+/// </summary>
 public sealed class AlertChangeTable
 {
     private const string Columns = "alert, seq, position, date, from_state, to_state, reason, severity, text, evidence";

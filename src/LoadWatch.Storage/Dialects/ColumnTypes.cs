@@ -5,7 +5,9 @@ using NodaTime.Text;
 
 namespace LoadWatch.Storage.Dialects;
 
-/// <summary>How values stand in columns: dates as <c>2026-03-01</c>; instants in UTC with nine decimals always, so that text sorts as time does.</summary>
+/// <summary>
+/// How values stand in columns: dates as <c>2026-03-01</c>; instants in UTC with nine decimals always, so that text sorts as time does.
+/// </summary>
 internal static class ColumnTypes
 {
     public static LocalDatePattern Date { get; } = LocalDatePattern.Iso;

@@ -3,8 +3,8 @@ using System.Data.Common;
 namespace LoadWatch.Storage.Dialects;
 
 /// <summary>
-/// Where databases differ: opening, transactions, claiming, and which errors mean that nothing written can be trusted. Every other statement is shared:
-/// it uses TEXT, BIGINT, DOUBLE PRECISION and BLOB, keys made by the application, and <c>ON CONFLICT</c>.
+/// Where databases differ: opening, transactions, claiming, and which errors mean that nothing written can be trusted. Every other statement is
+/// shared: it uses TEXT, BIGINT, DOUBLE PRECISION and BLOB, keys made by the application, and <c>ON CONFLICT</c>.
 /// </summary>
 public abstract class Dialect
 {

@@ -15,6 +15,7 @@ public sealed class SqliteDialect : Dialect
     // Below it, a bug of the write-ahead log's reset can lose commits.
     private static readonly Version OldestSqlite = new(3, 51, 3);
 
+    private const int NotADatabase = 26;
     private const int IoErrorOnSync = 10 | (4 << 8);
     private const int IoErrorOnFolderSync = 10 | (5 << 8);
 
@@ -26,7 +27,13 @@ public sealed class SqliteDialect : Dialect
         this.path = path;
 
         // The provider retries a busy database itself until this timeout (seconds); the engine's own setting would come on top.
-        connectionString = new SqliteConnectionStringBuilder { DataSource = path, DefaultTimeout = 5, ForeignKeys = true, Pooling = false }.ConnectionString;
+        connectionString = new SqliteConnectionStringBuilder
+        {
+            DataSource = path,
+            DefaultTimeout = 5,
+            ForeignKeys = true,
+            Pooling = false,
+        }.ConnectionString;
     }
 
     public override string ClaimClause => "";
@@ -35,9 +42,8 @@ public sealed class SqliteDialect : Dialect
     {
         // Made here with its mode; SQLite gives its side files the mode of the database.
         PrivateFiles.OpenOrCreate(path, FileShare.ReadWrite).Dispose();
+        RefuseForeign();
         using var connection = OpenWriter();
-        RefuseOldEngine(connection.ServerVersion);
-        RefuseForeign(connection);
         new SqliteSchema(connectionString).Upgrade(connection);
     }
 
@@ -87,8 +93,24 @@ public sealed class SqliteDialect : Dialect
         }
     }
 
+    // On a bare connection: even a change of the journal would leave its mark in another program's file.
+    private void RefuseForeign()
+    {
+        using var connection = new SqliteConnection(connectionString);
+        try
+        {
+            connection.Open();
+            RefuseOldEngine(connection.ServerVersion);
+            MarkOrRefuse(connection);
+        }
+        catch (SqliteException error) when (error.SqliteErrorCode == NotADatabase)
+        {
+            throw new DatabaseRefusedException($"{path} is no SQLite database: left as it is");
+        }
+    }
+
     // The mark goes into the empty file before any table, so a kill in between leaves no file that looks foreign.
-    private void RefuseForeign(DbConnection connection)
+    private void MarkOrRefuse(SqliteConnection connection)
     {
         var id = connection.ExecuteScalar<long>("PRAGMA application_id");
         if (id == ApplicationId)

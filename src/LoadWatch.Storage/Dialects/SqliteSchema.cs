@@ -21,7 +21,8 @@ internal sealed class SqliteSchema(string connectionString)
         var had = connection.ExecuteScalar<long>("PRAGMA user_version");
         if (had > Scripts.Count)
         {
-            throw new DatabaseRefusedException($"{connection.DataSource} was written by a newer LoadWatch (schema {had}, known up to {Scripts.Count})");
+            throw new DatabaseRefusedException(
+                $"{connection.DataSource} was written by a newer LoadWatch (schema {had}, known up to {Scripts.Count})");
         }
 
         if (had < Scripts.Count)

@@ -80,7 +80,7 @@ public static class DurableFile
     }
 
     // For file systems that cannot rename without overwriting. A kill between the two calls leaves both names, the content whole under each.
-    private static bool RenameByLink(string from, string to)
+    internal static bool RenameByLink(string from, string to)
     {
         if (LinuxCalls.Link(from, to) != 0)
         {

@@ -22,7 +22,8 @@ public static class SafeFile
     }
 
     /// <summary>
-    /// The identity of a folder, null where there is none. It changes when the folder is made anew or something is mounted over it, which sends no event.
+    /// The identity of a folder, null where there is none. It changes when the folder is made anew or something is mounted over it,
+    /// which sends no event.
     /// </summary>
     public static string? FolderId(string path)
     {
@@ -82,9 +83,13 @@ public static class SafeFile
                 return Unopened(Errno.NoEntry);
             }
 
-            return IsRegularElsewhere(path)
-                ? new OpenedFile(new FileStream(path, FileMode.Open, FileAccess.Read, FileShare.ReadWrite | FileShare.Delete, bufferSize: 0), StampElsewhere(path))
-                : NotRegular();
+            if (!IsRegularElsewhere(path))
+            {
+                return NotRegular();
+            }
+
+            var stream = new FileStream(path, FileMode.Open, FileAccess.Read, FileShare.ReadWrite | FileShare.Delete, bufferSize: 0);
+            return new OpenedFile(stream, StampElsewhere(path));
         }
         catch (UnauthorizedAccessException)
         {
@@ -96,8 +101,11 @@ public static class SafeFile
         }
     }
 
-    private static bool IsRegularElsewhere(string path) =>
-        File.Exists(path) && (File.GetAttributes(path) & (FileAttributes.ReparsePoint | FileAttributes.Device | FileAttributes.Directory)) == FileAttributes.None;
+    private static bool IsRegularElsewhere(string path)
+    {
+        const FileAttributes others = FileAttributes.ReparsePoint | FileAttributes.Device | FileAttributes.Directory;
+        return File.Exists(path) && (File.GetAttributes(path) & others) == FileAttributes.None;
+    }
 
     private static FileStamp StampElsewhere(string path)
     {
