@@ -1,1 +1,3 @@
-return 0;
+using LoadWatch.Service.Commands;
+
+return await CommandLine.RunAsync(args);

@@ -3,12 +3,14 @@ using LoadWatch.Recordings;
 namespace LoadWatch.Activities;
 
 /// <summary>
-/// Which readings can be true at all, by channel. Wide on purpose: they cut sensor codes and nonsense, not hard work. Common practice, no published source.
+/// Which readings can be true at all, by channel. Wide on purpose: they cut sensor codes and nonsense, not hard work. Common practice, no
+/// published source.
 /// </summary>
 public static class ChannelLimits
 {
     /// <summary>
-    /// Heart rate 25 to 250 bpm (so 0, a lost contact, and 254, a code for none, are out); power 0 to 3000 W; speed 0 to 45 m/s; every other
+    /// Heart rate 25 to 250 bpm (so 0, a lost contact, and 254, a code for none, are out); power 0 to 3000 W; speed 0 to 45 m/s; every
+    /// other
     /// channel as recorded. Never true for NaN or infinity.
     /// </summary>
     public static bool Usable(Channel channel, double value) => channel switch

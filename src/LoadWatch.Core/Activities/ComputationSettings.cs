@@ -5,10 +5,12 @@ namespace LoadWatch.Activities;
 /// <summary>What a user may set of the computation, each at its default.</summary>
 public sealed record ComputationSettings
 {
-    /// <summary>Share of the sampled time that must hold a usable reading before a channel gives a load or a stimulus, 0 to 1. A choice.</summary>
+    /// <summary>Share of the sampled time that must hold a usable reading before a channel gives a load or a stimulus, 0 to 1. A
+    /// choice.</summary>
     public double UsableShareWanted { get; init; } = 0.5;
 
-    /// <summary>Inner bounds of the heart-rate zones as fractions of heart-rate reserve where thresholds are not anchored (ACSM classes, Garber 2011).</summary>
+    /// <summary>Inner bounds of the heart-rate zones as fractions of heart-rate reserve where thresholds are not anchored (ACSM classes,
+    /// Garber 2011).</summary>
     public IReadOnlyList<double> HeartRateReserveBounds { get; init; } = [0.30, 0.40, 0.60, 0.90];
 
     /// <summary>Inner bounds of the power zones as fractions of critical power. A choice.</summary>

@@ -1,7 +1,8 @@
 namespace LoadWatch.Activities;
 
 /// <summary>
-/// Time by value of one channel: milliseconds per bin. Bins are whole bpm, whole watts, or tenths of a metre per second (the value's floor),
+/// Time by value of one channel: milliseconds per bin. Bins are whole bpm, whole watts, or tenths of a metre per second (the value's
+/// floor),
 /// so every heart-rate load and time in zone is exact again without decoding.
 /// </summary>
 public sealed class Histogram

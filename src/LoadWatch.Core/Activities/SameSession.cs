@@ -7,8 +7,10 @@ namespace LoadWatch.Activities;
 public sealed record SessionGroup(RecordingSummary Winner, IReadOnlyList<RecordingSummary> Superseded);
 
 /// <summary>
-/// The same session recorded by two devices or exported twice counts once (I-9): recordings that start within 2 s of the richest are one activity.
-/// Recordings of one file compete only if start and samples are equal. The order of richness is total, so the order of arrival never matters (I-5).
+/// The same session recorded by two devices or exported twice counts once (I-9): recordings that start within 2 s of the richest are one
+/// activity.
+/// Recordings of one file compete only if start and samples are equal. The order of richness is total, so the order of arrival never
+/// matters (I-5).
 /// </summary>
 public static class SameSession
 {

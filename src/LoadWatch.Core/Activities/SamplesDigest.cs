@@ -4,7 +4,8 @@ namespace LoadWatch.Activities;
 
 /// <summary>
 /// A stable 64-bit digest of what a recording measured: times, columns, beats of their own, sets. FNV-1a with 64 bits
-/// (Fowler, Noll and Vo; their published offset basis and prime), over little-endian bytes. It tells copies apart from neighbours; it is no protection against forgery.
+/// (Fowler, Noll and Vo; their published offset basis and prime), over little-endian bytes. It tells copies apart from neighbours; it is
+/// no protection against forgery.
 /// </summary>
 public static class SamplesDigest
 {

@@ -3,8 +3,10 @@ using LoadWatch.Recordings;
 namespace LoadWatch.Activities;
 
 /// <summary>
-/// Cuts a channel down to what can be used. Rows are sorted by time, rows of one time keep the order of the file, undated rows are left out.
-/// A reading stands for the time to the next usable one of its channel, at most 10 s; the last stands for 0. Pauses need no rule of their own:
+/// Cuts a channel down to what can be used. Rows are sorted by time, rows of one time keep the order of the file, undated rows are left
+/// out.
+/// A reading stands for the time to the next usable one of its channel, at most 10 s; the last stands for 0. Pauses need no rule of their
+/// own:
 /// whatever lies beyond those 10 s counts for nothing.
 /// </summary>
 public static class UsableSamples
@@ -26,7 +28,9 @@ public static class UsableSamples
         }
 
         SortByTime(rows);
-        var usable = rows.FindAll(row => ChannelLimits.Usable(channel, row.Value));
+        var usable = rows.TrueForAll(row => ChannelLimits.Usable(channel, row.Value))
+            ? rows
+            : rows.FindAll(row => ChannelLimits.Usable(channel, row.Value));
         return new UsableChannel(channel, WithDurations(usable), Share(usable, rows));
     }
 
@@ -83,8 +87,9 @@ public static class UsableSamples
         return samples;
     }
 
+    /// <summary>Unsigned, so that times from both ends of the range do not overflow: the later row comes second.</summary>
     private static int Duration(List<Row> rows, int row) =>
-        row == rows.Count - 1 ? 0 : (int)decimal.Min(LongestMilliseconds, (decimal)rows[row + 1].Time - rows[row].Time);
+        row == rows.Count - 1 ? 0 : (int)Math.Min(LongestMilliseconds, unchecked((ulong)(rows[row + 1].Time - rows[row].Time)));
 
     private static double Share(List<Row> usable, List<Row> all)
     {

@@ -1,4 +1,5 @@
-// The life of an alert as a state table on two axes, active and acknowledged, after IEC 62682 and ANSI/ISA-18.2; checked against OPC 10000-9, Table B.1.
+// The life of an alert as a state table on two axes, active and acknowledged, after IEC 62682 and ANSI/ISA-18.2; checked against
+// OPC 10000-9, Table B.1.
 //                                active  acknowledged
 //   Normal                       no      yes
 //   Unacknowledged               yes     no

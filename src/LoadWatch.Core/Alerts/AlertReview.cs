@@ -3,7 +3,9 @@ using NodaTime;
 
 namespace LoadWatch.Alerts;
 
-/// <summary>Holds one person's alerts against the findings of an evaluation date (I-14). Pure; a second time for the same date changes nothing.</summary>
+/// <summary>
+/// Holds one person's alerts against the findings of an evaluation date (I-14). Pure; a second time for the same date changes nothing.
+/// </summary>
 public static class AlertReview
 {
     /// <summary>

@@ -18,7 +18,9 @@ internal sealed record CalendarDate(
     public double? Load => State switch
     {
         DayState.Rest => 0,
-        DayState.Recorded when Activities.All(activity => activity.Load.HasValue) => Significant.Round(Activities.Sum(activity => activity.Load!.Value)),
+        DayState.Recorded when Activities.All(activity => activity.Load.HasValue) => Sum,
         _ => null,
     };
+
+    private double Sum => Significant.Round(Activities.Sum(activity => activity.Load!.Value));
 }

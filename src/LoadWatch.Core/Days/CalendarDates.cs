@@ -5,7 +5,7 @@ namespace LoadWatch.Days;
 /// <summary>Lays activities out on unbroken dates and settles the state of every date (I-6).</summary>
 internal static class CalendarDates
 {
-    /// <summary>A recording speaks for its source's empty days up to this many days before it. Days.</summary>
+    /// <summary>A recording speaks for its source's empty days up to this many days before it, back to the source's last recording. Days.</summary>
     private const int SettledDaysBack = 7;
 
     public static IEnumerable<CalendarDate> Lay(IReadOnlyList<ActivityOnDay> activities, LocalDate through)
@@ -50,15 +50,24 @@ internal static class CalendarDates
         _ => (DayState.Unknown, null),
     };
 
-    /// <summary>For every date the ordinally smallest source that recorded within the 7 days after it, or null.</summary>
+    /// <summary>
+    /// For every date the ordinally smallest source that recorded before it and again within the 7 days after it, or null. A source says nothing about
+    /// the time before its first recording: a new watch does not know what the old one would have seen.
+    /// </summary>
     private static string?[] Witnesses(List<ActivityOnDay>[] dates)
     {
         var witnesses = new string?[dates.Length];
+        var before = new Dictionary<string, int>(StringComparer.Ordinal);
         for (var index = 0; index < dates.Length; index++)
         {
-            foreach (var source in dates[index].SelectMany(activity => activity.Sources))
+            foreach (var source in dates[index].SelectMany(activity => activity.Sources).Distinct(StringComparer.Ordinal))
             {
-                Testify(witnesses.AsSpan(Math.Max(0, index - SettledDaysBack)..index), source);
+                if (before.TryGetValue(source, out var last))
+                {
+                    Testify(witnesses.AsSpan(Math.Max(last + 1, index - SettledDaysBack)..index), source);
+                }
+
+                before[source] = index;
             }
         }
 

@@ -81,7 +81,9 @@ public sealed record Day
 /// <param name="HeavyOrFast">Whether the date counts as heavy or fast; null where no channel could have seen it.</param>
 /// <param name="Days7">Heavy-or-fast days among the last 7; null when none of them is known.</param>
 /// <param name="Days28">The same for 28 days.</param>
-/// <param name="DaysSince">Days since the last heavy-or-fast day, 0 on one; where there was none, days since the region's first covered day; null before any covered day.</param>
+/// <param name="DaysSince">
+/// Days since the last heavy-or-fast day, 0 on one; where there was none, days since the region's first covered day; null before any.
+/// </param>
 /// <param name="KnownDaysSince">How many of the days after the last heavy-or-fast day up to this date are known.</param>
 /// <param name="UsualGapDays">The person's usual gap between heavy-or-fast days: the median over the last 365 days, days; null under 4 gaps.</param>
 public sealed record RegionDay(bool? HeavyOrFast, int? Days7, int? Days28, int? DaysSince, int KnownDaysSince, double? UsualGapDays)

@@ -15,12 +15,22 @@ internal static class HeavyOrFast
     public static bool? Judge(CalendarDate date, BodyRegion region) => date.State switch
     {
         DayState.Rest => false,
-        DayState.Recorded => Reaches(date, region) ? true : HasUnseenWork(date, region) ? null : false,
+        DayState.Recorded => JudgeWork(date, region),
         _ => null,
     };
 
     /// <summary>Whether some activity of the date had a figure that could see hard work of the region.</summary>
     public static bool IsSeen(CalendarDate date, BodyRegion region) => date.Activities.Any(activity => Of(activity, region).Any(Sees));
+
+    private static bool? JudgeWork(CalendarDate date, BodyRegion region)
+    {
+        if (Reaches(date, region))
+        {
+            return true;
+        }
+
+        return HasUnseenWork(date, region) ? null : false;
+    }
 
     private static bool Reaches(CalendarDate date, BodyRegion region)
     {

@@ -7,15 +7,18 @@ namespace LoadWatch.Days;
 public static class LoadCalendar
 {
     /// <summary>
-    /// Every date from the first activity to <paramref name="through"/>, oldest first; empty without activities. Activities dated later are ignored.
-    /// A day's own state may still be settled by recordings of the 7 days after it (I-6), and with it the values that rest on that state.
+    /// Every date from the first activity to <paramref name="through"/>, oldest first; empty without activities. Activities dated later
+    /// are ignored. A day's own state may still be settled by recordings of the 7 days after it (I-6), and with it the values that rest
+    /// on that state.
     /// </summary>
     /// <exception cref="ArgumentException">A load is not finite.</exception>
     public static IReadOnlyList<Day> Build(string person, IReadOnlyList<ActivityOnDay> activities, LocalDate through)
     {
         var loads = new LoadTrend();
         var regions = BodyRegions.All.Select(region => new StimulusTrend(region)).ToList();
-        return CalendarDates.Lay(activities, through).Select(date => loads.Add(Bare(person, date)) with { Regions = Regions(regions, date) }).ToList();
+        return CalendarDates.Lay(activities, through)
+            .Select(date => loads.Add(Bare(person, date)) with { Regions = Regions(regions, date) })
+            .ToList();
     }
 
     private static Day Bare(string person, CalendarDate date) => new()

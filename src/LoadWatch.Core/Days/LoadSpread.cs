@@ -11,18 +11,25 @@ internal static class LoadSpread
 
     /// <summary>Of the last 7 loads, dimensionless; null unless all are known and they differ.</summary>
     /// <param name="loads">Oldest first.</param>
-    public static double? Monotony(IReadOnlyList<double?> loads)
+    public static double? Monotony(ReadOnlySpan<double?> loads)
     {
-        var week = loads.Skip(loads.Count - Days).OfType<double>().ToList();
-        if (week.Count < Days || week.Max() <= week.Min())
+        if (LoadWindow.Of(loads, 0, Days) is not { Known: Days } week || AllEqual(loads[^Days..]))
         {
             return null;
         }
 
-        var mean = week.Average();
-        return Significant.Round(mean / Math.Sqrt(week.Sum(load => (load - mean) * (load - mean)) / (Days - 1)));
+        var mean = week.Sum / Days;
+        var squares = 0.0;
+        foreach (var load in loads[^Days..])
+        {
+            squares += (load!.Value - mean) * (load.Value - mean);
+        }
+
+        return Significant.Round(mean / Math.Sqrt(squares / (Days - 1)));
     }
 
     /// <summary>In the load's unit; null without monotony.</summary>
     public static double? Strain(double? weekLoad, double? monotony) => Significant.Round(weekLoad * monotony);
+
+    private static bool AllEqual(ReadOnlySpan<double?> loads) => !loads.ContainsAnyExcept(loads[0]);
 }

@@ -6,6 +6,8 @@
 //   weighted   E7 / E28                        Williams et al. 2017, "Better way to determine the acute:chronic workload ratio?"
 // A: load of the last 7 days, W1..W3: the weeks before, E: see WeightedAverage. Loads in the group's unit, ratios dimensionless.
 // Departures: a window with unknown days is scaled to its known ones, and is null where too few are known; over zero a ratio is null.
+using System.Runtime.InteropServices;
+
 namespace LoadWatch.Days;
 
 /// <summary>One person's load trends. Takes every date in order, oldest first.</summary>
@@ -29,13 +31,15 @@ internal sealed class LoadTrend
         return WithMedian(WithSpread(WithAverages(WithWeeks(day))));
     }
 
+    private ReadOnlySpan<double?> Loads => CollectionsMarshal.AsSpan(loads);
+
     private Day WithWeeks(Day day)
     {
-        var (week, month) = (LoadWindow.Of(loads, 0, 7), LoadWindow.Of(loads, 0, 28));
+        var (week, month) = (LoadWindow.Of(Loads, 0, 7), LoadWindow.Of(Loads, 0, 28));
         var acute = week.MeanWeek(KnownOf7);
         var chronic = loads.Count >= 28 ? month.MeanWeek(KnownOf28) : null;
-        var before = chronic.HasValue ? LoadWindow.Of(loads, 7, 21).MeanWeek(KnownOf21) : null;
-        var lastWeek = LoadWindow.Of(loads, 7, 7).MeanWeek(KnownOf7);
+        var before = chronic.HasValue ? LoadWindow.Of(Loads, 7, 21).MeanWeek(KnownOf21) : null;
+        var lastWeek = LoadWindow.Of(Loads, 7, 7).MeanWeek(KnownOf7);
         return day with
         {
             Acute = acute,
@@ -58,7 +62,7 @@ internal sealed class LoadTrend
 
     private Day WithSpread(Day day)
     {
-        var monotony = LoadSpread.Monotony(loads);
+        var monotony = LoadSpread.Monotony(Loads);
         return day with { Monotony = monotony, Strain = LoadSpread.Strain(day.Acute, monotony) };
     }
 

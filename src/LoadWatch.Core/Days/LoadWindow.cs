@@ -12,12 +12,12 @@ internal readonly record struct LoadWindow(double Sum, int Known, int Days)
     /// <param name="loads">Oldest first.</param>
     /// <param name="before">Newest days left out, count.</param>
     /// <param name="days">Length of the window.</param>
-    public static LoadWindow Of(IReadOnlyList<double?> loads, int before, int days)
+    public static LoadWindow Of(ReadOnlySpan<double?> loads, int before, int days)
     {
         var (sum, known) = (0.0, 0);
-        for (var index = Math.Max(0, loads.Count - before - days); index < loads.Count - before; index++)
+        for (var index = Math.Max(0, loads.Length - before - days); index < loads.Length - before; index++)
         {
-            sum += loads[index] ?? 0;
+            sum += loads[index].GetValueOrDefault();
             known += loads[index].HasValue ? 1 : 0;
         }
 

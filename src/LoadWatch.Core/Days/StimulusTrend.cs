@@ -3,8 +3,8 @@ using LoadWatch.Stimulus;
 namespace LoadWatch.Days;
 
 /// <summary>
-/// One body region's days of a person. Takes every date in order, oldest first. The region counts as covered from the first date on which some channel
-/// could see hard work of it: before that, nothing is known of it, not even on a rest day.
+/// One body region's days of a person. Takes every date in order, oldest first. The region counts as covered from the first date on
+/// which some channel could see hard work of it: before that, nothing is known of it, not even on a rest day.
 /// </summary>
 internal sealed class StimulusTrend(BodyRegion region)
 {
@@ -64,7 +64,13 @@ internal sealed class StimulusTrend(BodyRegion region)
 
     private int? HeavyAmong(int days)
     {
-        var known = judged.Skip(judged.Count - days).OfType<bool>().ToList();
-        return known.Count == 0 ? null : known.Count(heavy => heavy);
+        var (heavy, known) = (0, 0);
+        for (var index = Math.Max(0, judged.Count - days); index < judged.Count; index++)
+        {
+            heavy += judged[index] is true ? 1 : 0;
+            known += judged[index].HasValue ? 1 : 0;
+        }
+
+        return known == 0 ? null : heavy;
     }
 }

@@ -1,14 +1,17 @@
 // Acute load against the usual week, uncoupled: U = 7-day load / mean week of the 21 days before.
-// Windt and Gabbett 2018, "Is it all for naught? What does mathematical coupling mean for acute:chronic workload ratios?"; the limit of 1.8 uncoupled is
-// 1.5 coupled: C = 4 U / (U + 3). That a limit is watched at all, its value, coverage and return value are a choice: the ratio describes change and nothing else.
-using System.Globalization;
+// Windt and Gabbett 2018, "Is it all for naught? What does mathematical coupling mean for acute:chronic workload ratios?";
+// the limit of 1.8 uncoupled is 1.5 coupled: C = 4 U / (U + 3). That a limit is watched at all, its value, coverage and return value are
+// a choice: the ratio describes change and nothing else.
 using LoadWatch.Days;
 using LoadWatch.People;
 using NodaTime;
 
 namespace LoadWatch.Findings;
 
-/// <summary>The last 7 days are well above the usual week. Raised at the limit, holds until below the return value; its other conditions are for raising.</summary>
+/// <summary>
+/// The last 7 days are well above the usual week. Raised at the limit, holds until below the return value; history and chronic load are
+/// asked for when it is raised, coverage always: a day covered too thinly leaves things as they were (I-6).
+/// </summary>
 /// <param name="loadUnit">Unit of the group's load in texts and evidence.</param>
 public sealed class LoadRatioRule(string loadUnit = LoadRatioRule.ArbitraryUnits) : IRule
 {
@@ -41,9 +44,11 @@ public sealed class LoadRatioRule(string loadUnit = LoadRatioRule.ArbitraryUnits
 
     private static double Known(double coverage, int days) => Math.Round(coverage * days);
 
-    private static LocalDate? Since(LocalDate? since, Day day, LoadRatioLimits limits) => since is null
-        ? (Raises(day, limits) ? day.Date : null)
-        : (day.RatioUncoupled < Math.Min(limits.Return, limits.Raise) ? null : since);
+    private static LocalDate? Since(LocalDate? since, Day day, LoadRatioLimits limits)
+    {
+        var holds = since is null ? Raises(day, limits) : day.RatioUncoupled >= Math.Min(limits.Return, limits.Raise);
+        return holds ? since ?? day.Date : null;
+    }
 
     private static bool Raises(Day day, LoadRatioLimits limits) =>
         day.RatioUncoupled >= limits.Raise
@@ -83,7 +88,7 @@ public sealed class LoadRatioRule(string loadUnit = LoadRatioRule.ArbitraryUnits
         "uncoupled ratio = load of the last 7 days / mean week of the 21 days before, both scaled to their known days",
         "Windt and Gabbett 2018, Is it all for naught? What does mathematical coupling mean for acute:chronic workload ratios?; limits: a choice",
         [
-            new("ratio_uncoupled", read.RatioUncoupled, "ratio", $"on {read.Date.ToString("uuuu-MM-dd", CultureInfo.InvariantCulture)}"),
+            new("ratio_uncoupled", read.RatioUncoupled, "ratio", $"on {Wording.IsoDate(read.Date)}"),
             new("acute", read.Acute, loadUnit, "load of the last 7 days"),
             new("chronic_before", read.ChronicBefore, loadUnit, "mean week of the 21 days before"),
             new("ratio_coupled", read.RatioCoupled, "ratio"),

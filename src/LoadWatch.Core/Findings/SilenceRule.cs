@@ -1,4 +1,3 @@
-using System.Globalization;
 using LoadWatch.Days;
 using LoadWatch.People;
 using NodaTime;
@@ -50,10 +49,11 @@ public sealed class SilenceRule : IRule
     }
 
     private static Evidence Basis(Day day, RecordingRhythm rhythm, SilenceLimits limits) => new(
-        "days since the last recorded day, against a quantile of the gaps between recorded days before it (nearest rank upward) + extra days, at most the ceiling",
+        "days since the last recorded day, against a quantile of the gaps between recorded days before it (nearest rank upward) + extra days, "
+            + "at most the ceiling",
         "a choice",
         [
-            new("days_since_recorded", day.DaysSinceRecorded, "days", $"last on {rhythm.LastRecorded.ToString("uuuu-MM-dd", CultureInfo.InvariantCulture)}"),
+            new("days_since_recorded", day.DaysSinceRecorded, "days", $"last on {Wording.IsoDate(rhythm.LastRecorded)}"),
             new("usual_gap", rhythm.UsualGapDays, "days", "the quantile of the gaps"),
             new("gaps", rhythm.Gaps, "count"),
             new("limit", rhythm.LimitDays, "days"),

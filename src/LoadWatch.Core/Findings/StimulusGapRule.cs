@@ -1,5 +1,4 @@
 // Days without heavy or fast work of a body region, against limits by age. All limits are a choice; what counts as heavy or fast: HeavyOrFast.
-using System.Globalization;
 using LoadWatch.Days;
 using LoadWatch.People;
 using LoadWatch.Stimulus;
@@ -8,8 +7,8 @@ using NodaTime;
 namespace LoadWatch.Findings;
 
 /// <summary>
-/// Too long without heavy or fast work of a region, legs first. Only a heavy-or-fast day ends it. A day on which nothing is known, or a gap that is known
-/// too sparsely, neither raises nor worsens nor clears it: the last known state stands (I-6).
+/// Too long without heavy or fast work of a region, legs first. Only a heavy-or-fast day ends it. A day on which nothing is known, or a gap
+/// that is known too sparsely, neither raises nor worsens nor clears it: the last known state stands (I-6).
 /// </summary>
 public sealed class StimulusGapRule : IRule
 {
@@ -85,10 +84,11 @@ public sealed class StimulusGapRule : IRule
     };
 
     private static Evidence Basis(Gap gap, StimulusGapLimits limits) => new(
-        "days since the last heavy-or-fast day (3 hard bouts, or 6 hard repetitions in 2 sets; hard: relative drive of 0.70 or more), against a limit by age",
+        "days since the last heavy-or-fast day (3 hard bouts, or 6 hard repetitions in 2 sets; hard: relative drive of 0.70 or more), "
+            + "against a limit by age",
         "a choice",
         [
-            new("days_since", gap.Days, "days", $"on {gap.Date.ToString("uuuu-MM-dd", CultureInfo.InvariantCulture)}"),
+            new("days_since", gap.Days, "days", $"on {Wording.IsoDate(gap.Date)}"),
             new("known_days_since", gap.Region.KnownDaysSince, "days"),
             new("heavy_or_fast_days_28", gap.Region.Days28, "days"),
             new("usual_gap", gap.Region.UsualGapDays, "days", "median over the last 365 days"),

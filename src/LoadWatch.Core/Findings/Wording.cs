@@ -10,6 +10,9 @@ internal static class Wording
     public static string Date(LocalDate date, LocalDate told) =>
         date.ToString(date.Year == told.Year ? "d MMMM" : "d MMMM uuuu", CultureInfo.InvariantCulture);
 
+    /// <summary><c>2026-03-02</c>, for evidence.</summary>
+    public static string IsoDate(LocalDate date) => date.ToString("uuuu-MM-dd", CultureInfo.InvariantCulture);
+
     /// <summary><c>1 day</c>, <c>3.5 days</c>.</summary>
     public static string Days(double days) => days == 1 ? "1 day" : $"{Number(days)} days";
 

@@ -4,7 +4,8 @@ namespace LoadWatch.Loads;
 
 /// <summary>
 /// Summated-zone load. Source: Edwards 1993, The Heart Rate Monitor Book (weights from memory).
-/// Load = sum of k t(k): t(k) minutes in zone k = 1 to 5 for 50-60, 60-70, 70-80, 80-90 and 90-100 % of maximal heart rate; below 50 % nothing counts.
+/// Load = sum of k t(k): t(k) minutes in zone k = 1 to 5 for 50-60, 60-70, 70-80, 80-90 and 90-100 % of maximal heart rate; below 50 %
+/// nothing counts.
 /// The source leaves the edges open. Here: the lower bound belongs to the zone, and whatever is above the maximum counts as zone 5.
 /// </summary>
 public static class EdwardsLoad

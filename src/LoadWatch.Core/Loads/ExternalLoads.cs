@@ -3,7 +3,8 @@ using LoadWatch.Recordings;
 
 namespace LoadWatch.Loads;
 
-/// <summary>What was done, whatever it cost the body: minutes, distance, mechanical work. Sums and totals, no published source needed.</summary>
+/// <summary>What was done, whatever it cost the body: minutes, distance, mechanical work. Sums and totals, no published source
+/// needed.</summary>
 public static class ExternalLoads
 {
     /// <summary>Only what is known; each at most once.</summary>
@@ -33,7 +34,8 @@ public static class ExternalLoads
     public static double WorkKilojoules(UsableChannel power) =>
         Significant.Round(power.Samples.Sum(sample => sample.Value * sample.Milliseconds) / 1e6);
 
-    /// <summary>The largest reading, metres. It is a running total, so a part of the readings is enough, and no usable share is asked.</summary>
+    /// <summary>The largest reading, metres. It is a running total, so a part of the readings is enough, and no usable share is
+    /// asked.</summary>
     private static double? DistanceMetres(UsableRecording usable)
     {
         if (!usable.Channels.TryGetValue(Channel.Distance, out var distance) || distance.Samples.Count == 0)

@@ -6,7 +6,8 @@ namespace LoadWatch.Loads;
 /// <summary>
 /// The span between resting and maximal heart rate. Source: Karvonen, Kentala and Mustala 1957, The effects of training on heart rate,
 /// Ann Med Exp Biol Fenn 35:307-315 (from memory). x = (HR - HRrest) / (HRmax - HRrest), bpm in, dimensionless out.
-/// Departure: x below 0 or above 1 is taken as 0 or 1, since a rate outside the anchored span says that an anchor is off, not that load is negative or endless.
+/// Departure: x below 0 or above 1 is taken as 0 or 1, since a rate outside the anchored span says that an anchor is off, not that load is
+/// negative or endless.
 /// </summary>
 /// <param name="RestBpm">Resting heart rate.</param>
 /// <param name="MaxBpm">Maximal heart rate, above the resting one.</param>

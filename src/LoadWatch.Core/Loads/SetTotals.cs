@@ -5,6 +5,9 @@ namespace LoadWatch.Loads;
 /// <summary>Working sets, repetitions and kilograms of a session. The rest between two sets is no work.</summary>
 public static class SetTotals
 {
+    /// <summary>Beyond it a stated load is a slip of writing; no one lifts it.</summary>
+    public const double MostKilograms = 10_000;
+
     /// <summary>Sums over what is stated; a total of which nothing is stated is absent, and the remark says which sets lack what.</summary>
     public static (IReadOnlyList<Quantity> Quantities, string? Remark) Of(IReadOnlyList<StrengthSet> sets)
     {
@@ -15,7 +18,7 @@ public static class SetTotals
         }
 
         var counted = work.Where(set => set.Repetitions is not null).ToList();
-        var weighed = counted.Where(set => set.Kilograms is { } kilograms && double.IsFinite(kilograms)).ToList();
+        var weighed = counted.Where(set => set.Kilograms is >= 0 and <= MostKilograms).ToList();
         List<Quantity> quantities = [new(QuantityNames.Sets, work.Count, "count", Estimated: false)];
         if (counted.Count > 0)
         {

@@ -1,7 +1,8 @@
 namespace LoadWatch.Loads;
 
 /// <summary>
-/// Maximal heart rate from age. Source: Tanaka, Monahan and Seals 2001, Age-predicted maximal heart rate revisited, J Am Coll Cardiol 37:153-156.
+/// Maximal heart rate from age. Source: Tanaka, Monahan and Seals 2001, Age-predicted maximal heart rate revisited, J Am Coll Cardiol
+/// 37:153-156.
 /// HRmax = 208 - 0.7 age; age in years, result in bpm. Single people differ by about 10 bpm (standard deviation, from memory).
 /// </summary>
 public static class TanakaHeartRateMax

@@ -6,8 +6,10 @@ using NodaTime;
 namespace LoadWatch.Loads;
 
 /// <summary>
-/// Time in zone of heart rate, power and speed. Heart rate: three zones by the ventilatory thresholds where both are anchored, else the classes of
-/// Garber et al. 2011, Med Sci Sports Exerc 43:1334-1359, in fractions of heart-rate reserve. Power: fractions of critical power. Speed: fixed bounds.
+/// Time in zone of heart rate, power and speed. Heart rate: three zones by the ventilatory thresholds where both are anchored, else the
+/// classes of
+/// Garber et al. 2011, Med Sci Sports Exerc 43:1334-1359, in fractions of heart-rate reserve. Power: fractions of critical power. Speed:
+/// fixed bounds.
 /// </summary>
 public static class ZoneTimes
 {

@@ -14,6 +14,9 @@ public sealed record Brief
     /// <summary>The contact's local date on which it is due.</summary>
     public required LocalDate Date { get; init; }
 
+    /// <summary>The last date that the brief looks at; null when nobody has a day yet.</summary>
+    public LocalDate? DataUpTo { get; init; }
+
     /// <summary>Readable in five seconds, without names.</summary>
     public required string FirstLine { get; init; }
 
@@ -40,7 +43,17 @@ public sealed record FlaggedPerson(string PersonId, string Name, Severity Severi
 /// <param name="Consider">What to consider.</param>
 /// <param name="Decides">Who decides.</param>
 /// <param name="IsNew">Not told in an earlier brief.</param>
-public sealed record FlaggedReason(string AlertId, string Rule, BodyRegion? Region, string Sentence, string Consider, string Decides, bool IsNew);
+/// <param name="IsSeen">Somebody acknowledged it.</param>
+public sealed record FlaggedReason(
+    string AlertId,
+    string Rule,
+    BodyRegion? Region,
+    Severity Severity,
+    string Sentence,
+    string Consider,
+    string Decides,
+    bool IsNew,
+    bool IsSeen);
 
 /// <summary>One line about somebody or something.</summary>
 /// <param name="Subject">A name, or a file name.</param>
@@ -55,7 +68,7 @@ public sealed record BriefGroup(string Id, string Name, string LoadUnit, IReadOn
 /// <param name="UsualWeekLoad">Mean week of the 21 days before.</param>
 /// <param name="Ratio">The uncoupled ratio of the two.</param>
 /// <param name="KnownDays">Days with known load among the last 7.</param>
-/// <param name="DaysSinceHeavyLegs">Days since the last heavy-or-fast day of the legs.</param>
+/// <param name="DaysSinceHeavyLegs">Days since the last heavy-or-fast day of the legs; null where unknown or where none was ever seen, which the remark says.</param>
 /// <param name="HeavyLegsDays28">Heavy-or-fast days of the legs among the last 28.</param>
 /// <param name="Recent">The last 28 days, oldest first.</param>
 /// <param name="Remark">Why a number is missing, in plain words, or null.</param>

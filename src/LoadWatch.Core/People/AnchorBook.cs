@@ -13,12 +13,14 @@ public sealed class AnchorBook
     public static AnchorBook Empty { get; } = new([]);
 
     /// <summary>
-    /// The anchor that holds on <paramref name="date"/>, or null: measured before observed before estimated, then the latest, an undated one last.
+    /// The anchor that holds on <paramref name="date"/>, or null: measured before observed before estimated, then the latest, an undated
+    /// one last.
     /// </summary>
     public Anchor? On(LocalDate date, string person, AnchorKind kind, string? exercise = null) =>
         Best(anchors[(person, kind, exercise)].Where(anchor => anchor.Date is null || anchor.Date <= date));
 
-    /// <summary>The same among the anchors dated from <paramref name="earliest"/> on; an undated one is of unknown age and does not count.</summary>
+    /// <summary>The same among the anchors dated from <paramref name="earliest"/> on; an undated one is of unknown age and does not
+    /// count.</summary>
     public Anchor? Since(LocalDate earliest, LocalDate date, string person, AnchorKind kind, string? exercise = null) =>
         Best(anchors[(person, kind, exercise)].Where(anchor => anchor.Date >= earliest && anchor.Date <= date));
 

@@ -3,7 +3,8 @@ namespace LoadWatch.Stimulus;
 /// <summary>Makes bands from three readings.</summary>
 public static class Bands
 {
-    /// <summary>The middle reading stays; the outer ones are ordered around it, since merged bouts can make a harder reading count fewer.</summary>
+    /// <summary>The middle reading stays; the outer ones are ordered around it, since merged bouts can make a harder reading count
+    /// fewer.</summary>
     public static Band Of(double low, double mid, double high) => new(
         Significant.Round(Math.Min(mid, Math.Min(low, high))),
         Significant.Round(mid),

@@ -2,7 +2,8 @@ using LoadWatch.People;
 
 namespace LoadWatch.Stimulus;
 
-/// <summary>How far off a capacity may be, as a share of it: 2 % measured, 10 % from own data, 20 % from a population. Assumptions.</summary>
+/// <summary>How far off a capacity may be, as a share of it: 2 % measured, 10 % from own data, 20 % from a population.
+/// Assumptions.</summary>
 public static class CapacityError
 {
     public const double Measured = 0.02;

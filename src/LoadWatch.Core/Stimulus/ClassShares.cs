@@ -1,8 +1,10 @@
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// Shares of the three classes in the pool's summed twitch force, together 1. Source of the usual ones: Staron et al. 2000, Fiber type composition of the
-/// vastus lateralis muscle of young men and women, J Histochem Cytochem 48:623-629: 41 % I, 31 % IIA, 20 % IIB; intermediate fibres shared out: 43/34/23 %.
+/// Shares of the three classes in the pool's summed twitch force, together 1. Source of the usual ones: Staron et al. 2000, Fiber type
+/// composition of the
+/// vastus lateralis muscle of young men and women, J Histochem Cytochem 48:623-629: 41 % I, 31 % IIA, 20 % IIB; intermediate fibres shared
+/// out: 43/34/23 %.
 /// The split by summed force rather than by count is an assumption: larger units hold more fibres.
 /// </summary>
 /// <param name="Slow">Slow units (type I), 0 to 1.</param>

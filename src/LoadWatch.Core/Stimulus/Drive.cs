@@ -1,15 +1,18 @@
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// Relative drive of an endurance channel. Assumption: the critical intensity sits at a fixed drive (0.65 usually), the momentary maximum at 1.
-/// Source of the momentary maximum: Morton 1996, A 3-parameter critical power model, Ergonomics 39:611-619: available power = CP + (Pmax - CP) W'bal/W'.
+/// Relative drive of an endurance channel. Assumption: the critical intensity sits at a fixed drive (0.65 usually), the momentary maximum
+/// at 1.
+/// Source of the momentary maximum: Morton 1996, A 3-parameter critical power model, Ergonomics 39:611-619: available power = CP + (Pmax -
+/// CP) W'bal/W'.
 /// X up to X_c: e = 0.65 X / X_c. Above: e = min(1, 0.65 + 0.35 (X - X_c) / ((X_max - X_c) b)), b = W'bal / W'.
 /// </summary>
 public static class Drive
 {
     /// <param name="intensity">X, 0 or more, in the unit of the capacities.</param>
     /// <param name="critical">X_c, above 0.</param>
-    /// <param name="maximum">X_max, above <paramref name="critical"/>; null where unknown: then all above X_c reads as X_c, a lower bound.</param>
+    /// <param name="maximum">X_max, above <paramref name="critical"/>; null where unknown: then all above X_c reads as X_c, a lower
+    /// bound.</param>
     /// <param name="balance">b, 1 when fresh; 0 or less when exhausted.</param>
     /// <param name="criticalDrive">The drive at X_c.</param>
     /// <returns>0 to 1.</returns>

@@ -1,6 +1,7 @@
 namespace LoadWatch.Stimulus;
 
-/// <summary>Counts hard bouts: stretches at or above <see cref="HardLine"/> of at least 3 s, stretches less than 2 s apart being one. A choice.</summary>
+/// <summary>Counts hard bouts: stretches at or above <see cref="HardLine"/> of at least 3 s, stretches less than 2 s apart being one. A
+/// choice.</summary>
 public sealed class HardBouts
 {
     private const long ShortestMilliseconds = 3000;

@@ -1,6 +1,7 @@
 namespace LoadWatch.Stimulus;
 
-/// <summary>The line from which work counts as hard. A choice: well above the threshold of the largest class in the usual pool (0.61).</summary>
+/// <summary>The line from which work counts as hard. A choice: well above the threshold of the largest class in the usual pool
+/// (0.61).</summary>
 public static class HardLine
 {
     /// <summary>Relative drive.</summary>

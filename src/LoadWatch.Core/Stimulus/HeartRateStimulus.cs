@@ -2,7 +2,8 @@ using LoadWatch.Activities;
 
 namespace LoadWatch.Stimulus;
 
-/// <summary>Reads heart rate, the weakest channel: seconds of the slow and medium classes, bouts and the largest class unknown, grade E.</summary>
+/// <summary>Reads heart rate, the weakest channel: seconds of the slow and medium classes, bouts and the largest class unknown, grade
+/// E.</summary>
 public static class HeartRateStimulus
 {
     /// <param name="heartRate">Usable readings in time order, bpm.</param>

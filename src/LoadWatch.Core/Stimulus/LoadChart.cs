@@ -1,7 +1,8 @@
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// Load as a share of the one-repetition maximum from repetitions to failure: the training load chart of the National Strength and Conditioning Association.
+/// Load as a share of the one-repetition maximum from repetitions to failure: the training load chart of the National Strength and
+/// Conditioning Association.
 /// The chart has no row for 11 repetitions; between rows it is interpolated. Beyond 12 it says too little.
 /// </summary>
 public static class LoadChart

@@ -1,11 +1,14 @@
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// The rested pool of motor units that joins from small to large. Source: Potvin and Fuglevand 2017, A motor unit-based model of muscle fatigue,
+/// The rested pool of motor units that joins from small to large. Source: Potvin and Fuglevand 2017, A motor unit-based model of muscle
+/// fatigue,
 /// PLoS Comput Biol 13(6):e1005581, equations 1 to 7.
-/// n = 120 units; threshold RTE(i) = RR^((i-1)/(n-1)), in units of excitation; twitch force P(i) = RP^((i-1)/(n-1)), RP = 100, in units of P(1);
+/// n = 120 units; threshold RTE(i) = RR^((i-1)/(n-1)), in units of excitation; twitch force P(i) = RP^((i-1)/(n-1)), RP = 100, in units of
+/// P(1);
 /// contraction time CT(i) = 90 ms P(i)^(-ln 3 / ln 100); rate R(i) = min(peak, 8 + (E - RTE(i))) impulses per second from the threshold on.
-/// Departure: the peak rate falls from 35 to 25 with the threshold, 35 - 10 (RTE(i) - 1)/(RR - 1), not with rank: that form gives the published endurance times.
+/// Departure: the peak rate falls from 35 to 25 with the threshold, 35 - 10 (RTE(i) - 1)/(RR - 1), not with rank: that form gives the
+/// published endurance times.
 /// </summary>
 public sealed class MotorUnitPool
 {
@@ -31,7 +34,7 @@ public sealed class MotorUnitPool
             var rank = unit / (Units - 1.0);
             thresholds[unit] = Math.Pow(thresholdRange, rank);
             twitches[unit] = Math.Pow(TwitchRange, rank);
-            contractionSeconds[unit] = SlowestContractionSeconds * Math.Pow(twitches[unit], -Math.Log(ContractionRange) / Math.Log(TwitchRange));
+            contractionSeconds[unit] = SlowestContractionSeconds * Math.Pow(ContractionRange, -rank);
             peakRates[unit] = HighestPeakRate - (PeakRateFall * (thresholds[unit] - 1) / (thresholdRange - 1));
         }
 
@@ -99,7 +102,8 @@ public sealed class MotorUnitPool
         return high;
     }
 
-    /// <summary>Force of a unit as a share of its twitch force at full fusion, over the normalised rate (contraction time times rate).</summary>
+    /// <summary>Force of a unit as a share of its twitch force at full fusion, over the normalised rate (contraction time times
+    /// rate).</summary>
     private static double Fusion(double normalisedRate)
     {
         const double Bend = 0.4;

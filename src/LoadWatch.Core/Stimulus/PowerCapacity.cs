@@ -7,7 +7,8 @@ namespace LoadWatch.Stimulus;
 /// <param name="Critical">Critical power, W.</param>
 /// <param name="WPrime">W', J; null reads every moment as fresh.</param>
 /// <param name="Maximum">
-/// Maximal power of 1 s, W, only where it is a true one: dated within <see cref="RecentDays"/> days before and at least <see cref="LeastRatio"/> times
+/// Maximal power of 1 s, W, only where it is a true one: dated within <see cref="RecentDays"/> days before and at least <see
+/// cref="LeastRatio"/> times
 /// critical power. Otherwise people who never sprint would look as if they always did.
 /// </param>
 /// <param name="NotSeen">What is missing, in plain words.</param>
@@ -20,7 +21,8 @@ public sealed record PowerCapacity(Anchor Critical, Anchor? WPrime, Anchor? Maxi
     public const double LeastRatio = 2.5;
 
     /// <summary>
-    /// A: everything measured. D: a true maximum without W', so that fatigue is not seen (a lower bound). C: an anchor by a population equation. Else B.
+    /// A: everything measured. D: a true maximum without W', so that fatigue is not seen (a lower bound). C: an anchor by a population
+    /// equation. Else B.
     /// </summary>
     public Grade Grade
     {
@@ -41,12 +43,12 @@ public sealed record PowerCapacity(Anchor Critical, Anchor? WPrime, Anchor? Maxi
     /// <summary>Null without a critical power.</summary>
     public static PowerCapacity? On(LocalDate date, string person, AnchorBook anchors)
     {
-        if (anchors.On(date, person, AnchorKind.CriticalPower) is not { } critical)
+        if (anchors.On(date, person, AnchorKind.CriticalPower) is not { Value: > 0 } critical)
         {
             return null;
         }
 
-        var wPrime = anchors.On(date, person, AnchorKind.WPrime);
+        var wPrime = anchors.On(date, person, AnchorKind.WPrime) is { Value: > 0 } stated ? stated : null;
         var recent = anchors.Since(date.PlusDays(-RecentDays), date, person, AnchorKind.PowerMax);
         var maximum = recent is not null && recent.Value >= LeastRatio * critical.Value ? recent : null;
         return new PowerCapacity(critical, wPrime, maximum, [.. Missing(recent, maximum, wPrime)]);

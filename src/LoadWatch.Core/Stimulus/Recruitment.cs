@@ -11,8 +11,10 @@ public readonly record struct ClassFractions(double Slow, double Medium, double 
 }
 
 /// <summary>
-/// From relative drive to recruited fractions (assumption: the share of the momentary maximum reads like the share of maximal force in the pool).
-/// Units below the drive are in; between the thresholds of two units the count is interpolated; a class is at 0 below its own first threshold.
+/// From relative drive to recruited fractions (assumption: the share of the momentary maximum reads like the share of maximal force in the
+/// pool).
+/// Units below the drive are in; between the thresholds of two units the count is interpolated; a class is at 0 below its own first
+/// threshold.
 /// </summary>
 public sealed class Recruitment
 {

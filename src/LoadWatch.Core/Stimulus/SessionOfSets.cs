@@ -4,7 +4,8 @@ using NodaTime;
 
 namespace LoadWatch.Stimulus;
 
-/// <summary>Sorts the working sets of a session into body regions and reads each. An exercise without a region is asked for, not guessed.</summary>
+/// <summary>Sorts the working sets of a session into body regions and reads each. An exercise without a region is asked for, not
+/// guessed.</summary>
 public static class SessionOfSets
 {
     public static SessionStimulus Of(

@@ -7,16 +7,19 @@ using NodaTime;
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// The stimulus of one recording by body region. Working sets speak for themselves; otherwise the sport says which regions the endurance channels
+/// The stimulus of one recording by body region. Working sets speak for themselves; otherwise the sport says which regions the endurance
+/// channels
 /// speak for. Power beats heart rate; channels are never added.
 /// </summary>
 /// <param name="Regions">Legs first; empty where the sport or the exercises name no region.</param>
 /// <param name="Remarks">In plain words.</param>
 public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IReadOnlyList<string> Remarks)
 {
-    private const string NoChannel = "nothing to read it from: power with critical_power, or heart rate with heart_rate_rest and heart_rate_max";
+    private const string NoChannel =
+        "nothing to read it from: power with critical_power, or heart rate with heart_rate_rest and heart_rate_max";
 
-    public static SessionStimulus Of(UsableRecording usable, LocalDate date, Person person, AnchorBook anchors, ComputationSettings settings)
+    public static SessionStimulus Of(
+        UsableRecording usable, LocalDate date, Person person, AnchorBook anchors, ComputationSettings settings)
     {
         var work = usable.Recording.Sets.Where(set => set.Active).ToList();
         return work.Count > 0

@@ -1,3 +1,4 @@
+using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Recordings;
 using NodaTime;
@@ -27,7 +28,7 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
             return (null, "repetitions");
         }
 
-        var kilograms = set.Kilograms is > 0 and < double.PositiveInfinity ? set.Kilograms : null;
+        var kilograms = set.Kilograms is > 0 and <= SetTotals.MostKilograms ? set.Kilograms : null;
         var reserve = set.RepetitionsInReserve is >= 0 and < double.PositiveInfinity ? set.RepetitionsInReserve : null;
         var maximum = anchors.On(date, person, AnchorKind.OneRepetitionMax, set.Exercise);
         if (kilograms is { } load && maximum is not null)
@@ -37,11 +38,12 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
 
         return reserve is { } left && LoadChart.Share(repetitions + left) is { } share
             ? (FromChart(repetitions, share, left, kilograms is not null), null)
-            : (null, kilograms is null ? "a load, or repetitions in reserve up to 12 in all" : "one_repetition_max, or repetitions in reserve up to 12 in all");
+            : (null, $"{(kilograms is null ? "load" : "one_repetition_max")}, or repetitions in reserve up to 12 in all");
     }
 
     /// <summary>
-    /// Relative drive of each repetition in a variant. Without a stated reserve it is the load alone, a lower bound, and the high variant reads the set as taken to failure.
+    /// Relative drive of each repetition in a variant. Without a stated reserve it is the load alone, a lower bound, and the high variant
+    /// reads the set as taken to failure.
     /// </summary>
     public IEnumerable<double> Drives(Variant variant)
     {

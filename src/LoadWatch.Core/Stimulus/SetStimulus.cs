@@ -1,7 +1,8 @@
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// Sums the sets of one region. A repetition counts as 1 s of concentric work (an assumption; the length of a set holds pauses and lowering too).
+/// Sums the sets of one region. A repetition counts as 1 s of concentric work (an assumption; the length of a set holds pauses and
+/// lowering too).
 /// The grade is that of the poorest set that was read: the sum is no better.
 /// </summary>
 public static class SetStimulus

@@ -2,7 +2,8 @@ namespace LoadWatch.Stimulus;
 
 /// <summary>
 /// One reading of the estimator. The band of an estimate is the same session read three times: with what makes large units join late,
-/// as usual, and with what makes them join early. The spans are assumptions: RR 70, 50, 30; shares 10 points either way; anchor 0.65 by 0.05 either way.
+/// as usual, and with what makes them join early. The spans are assumptions: RR 70, 50, 30; shares 10 points either way; anchor 0.65 by
+/// 0.05 either way.
 /// </summary>
 /// <param name="Recruitment">The pool and its classes.</param>
 /// <param name="CriticalDrive">Relative drive at the critical intensity: critical power or the second threshold.</param>

@@ -3,7 +3,8 @@ using LoadWatch.Activities;
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// What is left of W', the work above critical power. Source: Skiba, Chidnok, Vanhatalo and Jones 2012, Modeling the expenditure and reconstitution of work
+/// What is left of W', the work above critical power. Source: Skiba, Chidnok, Vanhatalo and Jones 2012, Modeling the expenditure and
+/// reconstitution of work
 /// capacity above critical power, Med Sci Sports Exerc 44:1526-1532, integral form: W'bal(t) = W' - sum of W'exp(u) exp(-(t - u)/tau),
 /// tau = 546 exp(-0.01 D) + 316 s, D = critical power - mean power below it, W. Good to about 30 %.
 /// Departures: the sum is carried along, so that each sample costs the same; where no sample lies below critical power nothing recovers;
@@ -14,7 +15,8 @@ public static class WPrimeBalance
     /// <summary>Seconds, for D in watts (0 or more).</summary>
     public static double Tau(double belowCriticalWatts) => (546 * Math.Exp(-0.01 * belowCriticalWatts)) + 316;
 
-    /// <summary>The balance at the time of each sample, before its own work, joules; below 0 when more was spent than the anchors allow.</summary>
+    /// <summary>The balance at the time of each sample, before its own work, joules; below 0 when more was spent than the anchors
+    /// allow.</summary>
     public static double[] Of(IReadOnlyList<UsableSample> power, double criticalPowerWatts, double wPrimeJoules)
     {
         var tau = MeanBelow(power, criticalPowerWatts) is { } mean ? Tau(criticalPowerWatts - mean) : double.PositiveInfinity;

@@ -28,13 +28,13 @@ internal sealed class DeveloperFields
         Version++;
     }
 
-    /// <summary>What feeds a channel from a developer field at this place, or null.</summary>
-    public ChannelSource? Source(byte developer, byte number, int offset, int size)
+    /// <summary>What feeds a channel from a developer field, or null.</summary>
+    public ChannelSource? Source(DeveloperSlot field)
     {
-        if (!descriptions.TryGetValue(Key(developer, number), out var described) || described.Channel is not { } channel)
+        if (!descriptions.TryGetValue(Key(field.DeveloperIndex, field.Number), out var described) || described.Channel is not { } channel)
             return null;
 
-        var slot = new FieldSlot(number, described.Type, offset, size);
+        var slot = new FieldSlot(field.Number, described.Type, field.Offset, field.Size);
         return slot.Count > 0 ? new ChannelSource(channel, slot, described.Scale, described.Shift) : null;
     }
 

@@ -11,7 +11,7 @@ internal sealed class FitPartReader
     private const int DeveloperBit = 0x20;
     private readonly MessagePlan?[] live = new MessagePlan?[LocalTypes];
     private readonly DeveloperFields developer = new();
-    private readonly PlanBook plans;
+    private readonly PlanBook plans = new();
     private readonly MemoryBudget budget;
     private uint? clock;
     private string? fault;
@@ -19,7 +19,6 @@ internal sealed class FitPartReader
     public FitPartReader(MemoryBudget budget)
     {
         this.budget = budget;
-        plans = new PlanBook(developer);
         Content = new PartContent(budget);
     }
 
@@ -79,18 +78,18 @@ internal sealed class FitPartReader
         var payload = bytes.Slice(1, plan.PayloadSize);
         var seconds = plan.Timestamp(payload) ?? (isCompressed ? Advanced(header & 0x1F) : null);
         clock = seconds ?? clock;
-        Take(plan, local, payload, seconds * 1000L);
+        Take(plan, payload, seconds * 1000L);
         return 1 + plan.PayloadSize;
     }
 
     /// <summary>The clock moved on to the next time with these low five bits.</summary>
     private uint? Advanced(int lowBits) => clock is { } now ? unchecked(now + (((uint)lowBits - now) & 0x1F)) : null;
 
-    private void Take(MessagePlan plan, int local, ReadOnlySpan<byte> payload, long? time)
+    private void Take(MessagePlan plan, ReadOnlySpan<byte> payload, long? time)
     {
         if (plan.Message == FitMessages.Record)
         {
-            live[local] = plan = plans.Refreshed(plan);
+            plan.Bind(developer);
             Content.Samples.Add(plan, payload, time ?? SampleSeries.Undated);
         }
         else if (plan.Message == FitMessages.FieldDescription)

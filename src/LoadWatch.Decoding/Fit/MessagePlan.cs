@@ -3,6 +3,8 @@ namespace LoadWatch.Decoding.Fit;
 /// <summary>A definition made ready for its messages: lengths summed, places looked up.</summary>
 internal sealed class MessagePlan
 {
+    private int boundVersion = -1;
+
     public required int Message { get; init; }
 
     public required bool BigEndian { get; init; }
@@ -19,19 +21,29 @@ internal sealed class MessagePlan
     /// <summary>Record messages: what feeds the channels, the wide field before the narrow one.</summary>
     public ChannelSource[] Native { get; init; } = [];
 
-    /// <summary>Record messages: developer fields that stand for a field of the profile.</summary>
-    public ChannelSource[] Developer { get; init; } = [];
+    /// <summary>Record messages: developer fields that hold bytes.</summary>
+    public DeveloperSlot[] DeveloperSlots { get; init; } = [];
+
+    /// <summary>Record messages: developer fields that stand for a field of the profile, as described when last bound.</summary>
+    public ChannelSource[] Developer { get; private set; } = [];
 
     /// <summary>Record messages: place of the three bytes of packed speed and distance, or -1.</summary>
     public int PackedOffset { get; init; } = -1;
 
-    /// <summary>The definition's bytes where the plan depends on developer field descriptions, else null.</summary>
-    public byte[]? Definition { get; init; }
-
-    /// <summary>The state of the descriptions for which the plan was made.</summary>
-    public int DescriptionsVersion { get; init; }
-
     /// <summary>The timestamp of a message in seconds of the FIT epoch or of the device's uptime, or null.</summary>
     public uint? Timestamp(ReadOnlySpan<byte> payload) =>
         TimestampOffset >= 0 && FitNumber.UInt32(payload[TimestampOffset..], BigEndian) is var seconds and not uint.MaxValue ? seconds : null;
+
+    /// <summary>Binds the developer fields anew where descriptions changed since the last time.</summary>
+    public void Bind(DeveloperFields developer)
+    {
+        if (DeveloperSlots.Length == 0 || boundVersion == developer.Version)
+            return;
+
+        Developer = [.. DeveloperSlots.Select(developer.Source).OfType<ChannelSource>()];
+        boundVersion = developer.Version;
+    }
 }
+
+/// <summary>A developer field of a definition; its type is in its description.</summary>
+internal readonly record struct DeveloperSlot(byte DeveloperIndex, byte Number, int Offset, int Size);

@@ -1,28 +1,20 @@
 namespace LoadWatch.Decoding.Fit;
 
 /// <summary>Plans by the bytes of their definition: devices repeat the same few definitions thousands of times.</summary>
-internal sealed class PlanBook(DeveloperFields developer)
+internal sealed class PlanBook
 {
     private const int MostKept = 256;
     private readonly Dictionary<byte[], MessagePlan> plans = new(new ByContent());
 
-    public MessagePlan Get(ReadOnlySpan<byte> definition)
-    {
-        var byContent = plans.GetAlternateLookup<ReadOnlySpan<byte>>();
-        return byContent.TryGetValue(definition, out var plan) && IsCurrent(plan) ? plan : Add(definition);
-    }
-
-    /// <summary>The plan itself, or a new one where developer fields were described since it was made.</summary>
-    public MessagePlan Refreshed(MessagePlan plan) => IsCurrent(plan) ? plan : Get(plan.Definition);
-
-    private bool IsCurrent(MessagePlan plan) => plan.Definition is null || plan.DescriptionsVersion == developer.Version;
+    public MessagePlan Get(ReadOnlySpan<byte> definition) =>
+        plans.GetAlternateLookup<ReadOnlySpan<byte>>().TryGetValue(definition, out var plan) ? plan : Add(definition);
 
     private MessagePlan Add(ReadOnlySpan<byte> definition)
     {
         if (plans.Count >= MostKept)
             plans.Clear();
 
-        return plans.GetAlternateLookup<ReadOnlySpan<byte>>()[definition] = PlanCompiler.Compile(definition, developer);
+        return plans.GetAlternateLookup<ReadOnlySpan<byte>>()[definition] = PlanCompiler.Compile(definition);
     }
 
     private sealed class ByContent : IEqualityComparer<byte[]>, IAlternateEqualityComparer<ReadOnlySpan<byte>, byte[]>

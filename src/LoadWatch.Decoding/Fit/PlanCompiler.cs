@@ -1,5 +1,3 @@
-using LoadWatch.Recordings;
-
 namespace LoadWatch.Decoding.Fit;
 
 /// <summary>
@@ -11,27 +9,25 @@ internal static class PlanCompiler
     public const int FixedSize = 5;
     public const int FieldSize = 3;
 
-    public static MessagePlan Compile(ReadOnlySpan<byte> definition, DeveloperFields developer)
+    public static MessagePlan Compile(ReadOnlySpan<byte> definition)
     {
         var bigEndian = definition[1] != 0;
         var message = FitNumber.UInt16(definition[2..], bigEndian);
         var fields = Fields(definition[FixedSize..], definition[4], out var nativeSize);
         var timestamp = Array.Find(fields, field => field.Number == FitFields.Timestamp && field.Size == 4 && field.Type.Size() == 4);
         var ends = FixedSize + (definition[4] * FieldSize);
-        var tail = ends < definition.Length ? definition[(ends + 1)..] : [];
+        var developer = Developer(ends < definition.Length ? definition[(ends + 1)..] : [], nativeSize, out var size);
         var isRecord = message == FitMessages.Record;
         return new MessagePlan
         {
             Message = message,
             BigEndian = bigEndian,
-            PayloadSize = nativeSize + SizesOf(tail),
+            PayloadSize = size,
             TimestampOffset = timestamp.Size == 4 ? timestamp.Offset : -1,
             Fields = FitMessages.IsRead(message) && !isRecord ? Array.FindAll(fields, field => field.Size > 0) : [],
             Native = isRecord ? Native(fields) : [],
-            Developer = isRecord ? Developer(tail, nativeSize, developer) : [],
+            DeveloperSlots = isRecord ? developer : [],
             PackedOffset = isRecord ? Packed(fields) : -1,
-            Definition = isRecord && tail.Length > 0 ? definition.ToArray() : null,
-            DescriptionsVersion = developer.Version,
         };
     }
 
@@ -49,30 +45,24 @@ internal static class PlanCompiler
         return fields;
     }
 
-    private static int SizesOf(ReadOnlySpan<byte> developerEntries)
-    {
-        var size = 0;
-        for (var at = 0; at < developerEntries.Length; at += FieldSize)
-            size += developerEntries[at + 1];
-
-        return size;
-    }
-
     private static ChannelSource[] Native(FieldSlot[] fields) =>
         [.. fields.OrderBy(field => ChannelSource.IsEnhanced(field.Number) ? 0 : 1).Select(ChannelSource.Native).OfType<ChannelSource>()];
 
-    private static ChannelSource[] Developer(ReadOnlySpan<byte> entries, int offset, DeveloperFields developer)
+    /// <summary>The developer fields behind the others; those without bytes only count as absent.</summary>
+    private static DeveloperSlot[] Developer(ReadOnlySpan<byte> entries, int offset, out int end)
     {
-        var sources = new List<ChannelSource>();
+        var slots = new List<DeveloperSlot>();
         for (var at = 0; at < entries.Length; at += FieldSize)
         {
-            if (developer.Source(entries[at + 2], entries[at], offset, entries[at + 1]) is { } source)
-                sources.Add(source);
+            var size = entries[at + 1];
+            if (size > 0)
+                slots.Add(new DeveloperSlot(entries[at + 2], entries[at], offset, size));
 
-            offset += entries[at + 1];
+            offset += size;
         }
 
-        return [.. sources];
+        end = offset;
+        return [.. slots];
     }
 
     private static int Packed(FieldSlot[] fields)

@@ -10,7 +10,8 @@ public class ActivityComputationTests
     private static readonly AnchorBook Book = Given.Anchors(
         [.. Given.Cyclist, Given.Anchor(AnchorKind.HeartRateRest, 50), Given.Anchor(AnchorKind.HeartRateMax, 190)]);
 
-    /// <summary>By hand: 60 minutes at 150 bpm, rest 50, maximum 190 is 108.0954 (Banister 1991); 150 of 190 bpm is 79 %, weight 3; 200 W for an hour is 720 kJ.</summary>
+    /// <summary>By hand: 60 minutes at 150 bpm, rest 50, maximum 190 is 108.0954 (Banister 1991); 150 of 190 bpm is 79 %, weight 3; 200 W
+    /// for an hour is 720 kJ.</summary>
     [Fact]
     public void ARideGivesEveryQuantityThatItHolds()
     {

@@ -34,8 +34,8 @@ public class AlertLifeTests
     }
 
     /// <summary>
-    /// The columns Active and Acked of OPC 10000-9 (OPC UA Part 9), Table B.1, events 1 to 8. There is no confirming here, so events 4 and 8 (confirmed)
-    /// change nothing, and the column Retain, which also counts what is not yet confirmed, is compared where Confirmed is true.
+    /// The columns Active and Acked of OPC 10000-9 (OPC UA Part 9), Table B.1, events 1 to 8. There is no confirming here, so events 4 and 8
+    /// (confirmed) change nothing, and the column Retain, which also counts what is not yet confirmed, is compared where Confirmed is true.
     /// </summary>
     [Fact]
     public void FollowsThePublishedSequence()

@@ -178,7 +178,8 @@ public class AlertReviewTests
     private static Alert Alert(AlertState state) => new(Legs, On(5), On(5), state, Severity.Notice, "as told");
 
     private static Finding Find(FindingKey key, int day, int? since = null, Severity severity = Severity.Notice) => new(
-        key.Person, On(day), key.Rule, key.Region, severity, On(since ?? day), 10, 10, "days", $"{key.Rule} on {day}", new Evidence("f", "a choice", []));
+        key.Person, On(day), key.Rule, key.Region, severity, On(since ?? day), 10, 10, "days", $"{key.Rule} on {day}",
+        new Evidence("f", "a choice", []));
 
     private static void AssertChange(AlertReviewResult result, int sequence, AlertState from, AlertState to, AlertChangeReason reason)
     {

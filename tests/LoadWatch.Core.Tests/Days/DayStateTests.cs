@@ -24,9 +24,8 @@ public class DayStateTests
     {
         var days = Build(5, Activity(0), Activity(2));
 
-        Assert.Equal([DayState.Recorded, DayState.Rest, DayState.Recorded, DayState.Unknown, DayState.Unknown, DayState.Unknown], days.Select(day => day.State));
-        Assert.All(days.Skip(3), day => Assert.Null(day.Load));
-        Assert.All(days.Skip(3), day => Assert.Null(day.StateSource));
+        Assert.Equal([DayState.Recorded, DayState.Rest, DayState.Recorded], days.Take(3).Select(day => day.State));
+        Assert.All(days.Skip(3), day => Assert.Equal((DayState.Unknown, null, null), (day.State, day.StateSource, day.Load)));
         Assert.Equal([0, 1, 0, 1, 2, 3], days.Select(day => day.DaysSinceRecorded));
     }
 

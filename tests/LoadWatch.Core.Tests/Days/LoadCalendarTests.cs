@@ -15,8 +15,12 @@ public class LoadCalendarTests
             Gen.Int[0, 9],
             Gen.Int[0, 3],
             Gen.Int[0, 6],
-            (day, load, luck, source, stimulus) => Activity(day, luck == 0 ? null : load, source == 0 ? "bike" : "watch", $"k{luck}{source}{stimulus}", Stimulus(stimulus)))
+            (day, load, luck, source, stimulus) =>
+                Activity(day, luck == 0 ? null : load, source == 0 ? "bike" : "watch", $"k{luck}{source}{stimulus}", Stimulus(stimulus)))
         .Array[0, 45];
+
+    private static readonly Gen<(ActivityOnDay[] Activities, int Through, int More)> TwoLooks =
+        Gen.Select(Activities, Gen.Int[0, 90], Gen.Int[0, 30], (activities, through, more) => (activities, through, more));
 
     [Fact]
     public void WithoutActivitiesThereAreNoDays() => Assert.Empty(Build(10));
@@ -65,19 +69,19 @@ public class LoadCalendarTests
 
     /// <summary>I-5 with I-6: recordings of the 7 days after a date may settle states, so anything 7 days before the last date is final.</summary>
     [Fact]
-    public void WhatCameLaterChangesNoDayOlderThanTheSevenThatMayBeSettled() => Gen.Select(Activities, Gen.Int[0, 90], Gen.Int[0, 30]).Sample((activities, through, more) =>
+    public void WhatCameLaterChangesNoDayOlderThanTheSevenThatMayBeSettled() => TwoLooks.Sample(look =>
     {
-        var (early, late) = (Build(through, activities), Build(through + more, activities));
-        var final = early.TakeWhile(day => day.Date <= On(through - 7)).ToList();
+        var (early, late) = (Build(look.Through, look.Activities), Build(look.Through + look.More, look.Activities));
+        var final = early.TakeWhile(day => day.Date <= On(look.Through - 7)).ToList();
         AssertSame(final, late.Take(final.Count));
     });
 
     /// <summary>I-5: a value rests on nothing dated later but the states that were settled since.</summary>
     [Fact]
-    public void UpToTheFirstDateWhoseStateWasSettledSinceEveryValueIsTheSame() => Gen.Select(Activities, Gen.Int[0, 90], Gen.Int[0, 30]).Sample((activities, through, more) =>
+    public void UpToTheFirstDateWhoseStateWasSettledSinceEveryValueIsTheSame() => TwoLooks.Sample(look =>
     {
-        var (early, late) = (Build(through, activities), Build(through + more, activities));
-        var same = early.Zip(late).TakeWhile(pair => (pair.First.State, pair.First.StateSource) == (pair.Second.State, pair.Second.StateSource)).Count();
+        var (early, late) = (Build(look.Through, look.Activities), Build(look.Through + look.More, look.Activities));
+        var same = early.Zip(late, (before, after) => (before.State, before.StateSource) == (after.State, after.StateSource)).TakeWhile(equal => equal).Count();
         AssertSame(early.Take(same), late.Take(same));
     });
 
@@ -106,7 +110,8 @@ public class LoadCalendarTests
     {
         foreach (var day in Build(100, activities))
         {
-            double?[] values = [day.Acute, day.Chronic, day.ChronicBefore, day.RatioCoupled, day.RatioUncoupled, day.RatioEwma, day.Monotony, day.Strain, day.ChronicMedian];
+            double?[] loads = [day.Acute, day.Chronic, day.ChronicBefore, day.ChronicMedian, day.EwmaAcute, day.EwmaChronic];
+            double?[] values = [.. loads, day.RatioCoupled, day.RatioUncoupled, day.RatioEwma, day.Monotony, day.Strain];
             Assert.All(values, value => Assert.True(value is null || (double.IsFinite(value.Value) && value >= 0)));
         }
     });

@@ -10,7 +10,8 @@ public class StimulusTrendTests
     [InlineData(3, true)]
     [InlineData(2.99, false)]
     [InlineData(0, false)]
-    public void ThreeHardBoutsMakeTheDay(double bouts, bool heavy) => Assert.Equal(heavy, Legs(Build(0, Activity(0, stimulus: Bouts(bouts))))[0].HeavyOrFast);
+    public void ThreeHardBoutsMakeTheDay(double bouts, bool heavy) =>
+        Assert.Equal(heavy, Legs(Build(0, Activity(0, stimulus: Bouts(bouts))))[0].HeavyOrFast);
 
     [Theory]
     [InlineData(6, 2, true)]
@@ -23,13 +24,19 @@ public class StimulusTrendTests
     public void TheActivitiesOfADateCountTogether()
     {
         Assert.True(Legs(Build(0, Activity(0, key: "a", stimulus: Bouts(1)), Activity(0, key: "b", stimulus: Bouts(2))))[0].HeavyOrFast);
-        Assert.True(Legs(Build(0, Activity(0, key: "a", stimulus: Repetitions(3, 1)), Activity(0, key: "b", stimulus: Repetitions(3, 1))))[0].HeavyOrFast);
+        Assert.True(Legs(Build(0, Activity(0, key: "a", stimulus: Repetitions(3, 1)), Activity(0, key: "b", stimulus: Repetitions(3, 1))))[0]
+            .HeavyOrFast);
     }
 
     [Fact]
     public void WorkThatNoChannelCouldSeeLeavesTheDayUnknown()
     {
-        var days = Build(2, Activity(0, stimulus: Bouts(0)), Activity(1, stimulus: Unseen()), Activity(2, key: "a", stimulus: Unseen()), Activity(2, key: "b", stimulus: Bouts(1)));
+        var days = Build(
+            2,
+            Activity(0, stimulus: Bouts(0)),
+            Activity(1, stimulus: Unseen()),
+            Activity(2, key: "a", stimulus: Unseen()),
+            Activity(2, key: "b", stimulus: Bouts(1)));
 
         Assert.Equal([false, null, null], Legs(days).Select(region => region.HeavyOrFast));
     }

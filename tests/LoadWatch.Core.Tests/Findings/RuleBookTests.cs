@@ -46,7 +46,9 @@ public class RuleBookTests
 
     [Fact]
     public void TheGroupsUnitIsPassedOn() =>
-        Assert.Contains(RuleBook.Evaluate(Anna, BusyDays(), Watched.Defaults, "kJ"), finding => finding.Text.Contains(" kJ)", StringComparison.Ordinal));
+        Assert.Contains(
+            RuleBook.Evaluate(Anna, BusyDays(), Watched.Defaults, "kJ"),
+            finding => finding.Text.Contains(" kJ)", StringComparison.Ordinal));
 
     [Fact]
     public void DefaultLimitsLieInTheirRanges()

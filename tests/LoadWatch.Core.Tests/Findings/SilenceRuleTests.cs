@@ -9,7 +9,8 @@ public class SilenceRuleTests
 {
     private static readonly SilenceRule Rule = new();
 
-    private static readonly int[] MondaysWednesdaysFridays = [.. Enumerable.Range(0, 12).SelectMany(week => new[] { 7 * week, (7 * week) + 2, (7 * week) + 4 })];
+    private static readonly int[] MondaysWednesdaysFridays =
+        [.. Enumerable.Range(0, 12).SelectMany(week => new[] { 7 * week, (7 * week) + 2, (7 * week) + 4 })];
 
     [Fact]
     public void ThreeDaysAWeekAreNoSilence() => Assert.Empty(Rule.Of(Recorded(81, MondaysWednesdaysFridays)));
@@ -21,7 +22,8 @@ public class SilenceRuleTests
         var found = Rule.Of(Recorded(92, [.. MondaysWednesdaysFridays, 90]));
 
         Assert.Equal(Enumerable.Range(87, 3).Select(On), found.Select(finding => finding.Date));
-        Assert.All(found, finding => Assert.Equal((On(87), 5, Severity.Notice, "days"), (finding.Since, finding.Limit, finding.Severity, finding.Unit)));
+        Assert.All(found, finding => Assert.Equal((On(87), 5, "days"), (finding.Since, finding.Limit, finding.Unit)));
+        Assert.All(found, finding => Assert.Equal(Severity.Notice, finding.Severity));
         Assert.Equal([6.0, 7, 8], found.Select(finding => finding.Value));
         Assert.Equal("No recording for 8 days; usually one at least every 3 days.", found[^1].Text);
     }
@@ -56,6 +58,14 @@ public class SilenceRuleTests
         Assert.Equal(4, Rule.Of(Recorded(120, recorded))[0].Limit);
     }
 
+    /// <summary>By hand: six gaps, the oldest begins 84 days before the last recording; a day earlier it is none, and five are too few.</summary>
+    [Fact]
+    public void AGapThatBeginsWhereTheLookBackBeginsCounts()
+    {
+        Assert.Equal(22, Rule.Of(Recorded(120, 0, 20, 36, 48, 60, 72, 84))[0].Limit);
+        Assert.Empty(Rule.Of(Recorded(120, 0, 20, 36, 48, 60, 72, 85)));
+    }
+
     [Fact]
     public void AfterSixWeeksItIsSilenceWhateverTheRhythm()
     {
@@ -76,12 +86,14 @@ public class SilenceRuleTests
     }
 
     [Fact]
-    public void EveryDayIsSaidAsSuch() => Assert.Equal("No recording for 4 days; usually one every day.", Rule.Of(Recorded(23, [.. Enumerable.Range(0, 20)]))[^1].Text);
+    public void EveryDayIsSaidAsSuch() =>
+        Assert.Equal("No recording for 4 days; usually one every day.", Rule.Of(Recorded(23, [.. Enumerable.Range(0, 20)]))[^1].Text);
 
     [Fact]
     public void TheEvidenceHoldsTheRhythm()
     {
-        var values = Rule.Of(Recorded(90, MondaysWednesdaysFridays))[^1].Evidence.Inputs.ToDictionary(item => item.Name, item => item.Value, StringComparer.Ordinal);
+        var evidence = Rule.Of(Recorded(90, MondaysWednesdaysFridays))[^1].Evidence;
+        var values = evidence.Inputs.ToDictionary(item => item.Name, item => item.Value, StringComparer.Ordinal);
 
         Assert.Equal((9, 3, 35, 5, 2), (values["days_since_recorded"], values["usual_gap"], values["gaps"], values["limit"], values["extra"]));
     }

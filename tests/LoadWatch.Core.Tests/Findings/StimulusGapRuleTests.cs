@@ -74,10 +74,10 @@ public class StimulusGapRuleTests
     [Fact]
     public void AnUncoveredRegionRaisesNothing()
     {
-        var days = GapOf(40).Select(day => day with { Regions = new Dictionary<BodyRegion, RegionDay> { [BodyRegion.Legs] = RegionDay.NotCovered } }).ToList();
+        var uncovered = new Dictionary<BodyRegion, RegionDay> { [BodyRegion.Legs] = RegionDay.NotCovered };
 
-        Assert.Empty(Rule.Of(days));
-        Assert.Empty(Rule.Of(days.Select(day => day with { Regions = new Dictionary<BodyRegion, RegionDay>() }).ToList()));
+        Assert.Empty(Rule.Of(GapOf(40).Select(day => day with { Regions = uncovered }).ToList()));
+        Assert.Empty(Rule.Of(GapOf(40).Select(day => day with { Regions = new Dictionary<BodyRegion, RegionDay>() }).ToList()));
     }
 
     [Fact]

@@ -5,7 +5,8 @@ namespace LoadWatch.Loads;
 
 public class BanisterTrimpTests
 {
-    /// <summary>Hand calculation from the equation with the published pairs (Banister 1991; Morton, Fitz-Clarke and Banister 1990).</summary>
+    /// <summary>Hand calculation from the equation with the published pairs (Banister 1991; Morton, Fitz-Clarke and Banister
+    /// 1990).</summary>
     [Theory]
     [InlineData(30, 130, 40, 200, Sex.Male, 31.8025)]
     [InlineData(30, 130, 40, 200, Sex.Female, 37.1285)]

@@ -4,7 +4,8 @@ namespace LoadWatch.Loads;
 
 public class HeartRateReserveTests
 {
-    /// <summary>Textbook example of the reserve method (from memory, arithmetic by hand): rest 70, maximum 180, 60 to 70 % is 136 to 147 bpm.</summary>
+    /// <summary>Textbook example of the reserve method (from memory, arithmetic by hand): rest 70, maximum 180, 60 to 70 % is 136 to 147
+    /// bpm.</summary>
     [Theory]
     [InlineData(0.60, 136)]
     [InlineData(0.70, 147)]

@@ -23,4 +23,11 @@ public class SetTotalsTests
 
     [Fact]
     public void ASessionOfRestsAloneHasNoTotals() => Assert.Empty(SetTotals.Of([Given.Set(null, null, null, active: false)]).Quantities);
+
+    [Theory]
+    [InlineData(double.MaxValue)]
+    [InlineData(double.NaN)]
+    [InlineData(-5)]
+    public void AnImpossibleLoadIsNoLoad(double kilograms) =>
+        Assert.Equal(["sets", "repetitions"], SetTotals.Of([Given.Set("squat", 8, kilograms)]).Quantities.Select(one => one.Name));
 }

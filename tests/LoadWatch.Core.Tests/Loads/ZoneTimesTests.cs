@@ -8,7 +8,8 @@ public class ZoneTimesTests
 
     private static readonly Anchor[] RestAndMax = [Given.Anchor(AnchorKind.HeartRateRest, 65), Given.Anchor(AnchorKind.HeartRateMax, 155)];
 
-    /// <summary>Classes of Garber et al. 2011 (Med Sci Sports Exerc 43:1334-1359); bounds by hand for rest 65, maximum 155: 92, 101, 119, 146.</summary>
+    /// <summary>Classes of Garber et al. 2011 (Med Sci Sports Exerc 43:1334-1359); bounds by hand for rest 65, maximum 155: 92, 101, 119,
+    /// 146.</summary>
     [Theory]
     [InlineData(91, 0)]
     [InlineData(92, 1)]

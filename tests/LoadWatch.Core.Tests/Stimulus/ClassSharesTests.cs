@@ -2,7 +2,8 @@ namespace LoadWatch.Stimulus;
 
 public class ClassSharesTests
 {
-    /// <summary>Computed independently from the pool of Potvin and Fuglevand 2017 cut by summed twitch force; shares of Staron et al. 2000 first.</summary>
+    /// <summary>Computed independently from the pool of Potvin and Fuglevand 2017 cut by summed twitch force; shares of Staron et al. 2000
+    /// first.</summary>
     [Theory]
     [InlineData(0.43, 0.34, 99, 14, 7)]
     [InlineData(0.46, 0.34, 100, 14, 6)]

@@ -18,7 +18,8 @@ public class DriveTests
         Assert.Equal(drive, PowerStimulus.Drives(Given.Samples((350, 200)), capacity, Variant.Mid)[second], 5e-5);
     }
 
-    /// <summary>Morton 1996: time to exhaustion W'/(P - CP) - W'/(Pmax - CP), computed from the equation. There the drive just reaches 1.</summary>
+    /// <summary>Morton 1996: time to exhaustion W'/(P - CP) - W'/(Pmax - CP), computed from the equation. There the drive just reaches
+    /// 1.</summary>
     [Theory]
     [InlineData(300, 373.33)]
     [InlineData(350, 173.33)]

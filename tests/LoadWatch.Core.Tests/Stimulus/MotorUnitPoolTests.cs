@@ -1,7 +1,8 @@
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// Constants of Potvin and Fuglevand 2017 (PLoS Comput Biol 13(6):e1005581). The maximal force is the published figure; the tables were computed
+/// Constants of Potvin and Fuglevand 2017 (PLoS Comput Biol 13(6):e1005581). The maximal force is the published figure; the tables were
+/// computed
 /// independently from the paper's equations: they guard the equations and are no evidence.
 /// </summary>
 public class MotorUnitPoolTests

@@ -43,6 +43,13 @@ public class PowerCapacityTests
     [Fact]
     public void WithoutCriticalPowerThereIsNone() => Assert.Null(PowerCapacity.On(Given.Date, "p1", AnchorBook.Empty));
 
+    [Fact]
+    public void ACapacityOfNothingIsNotKnown()
+    {
+        Assert.Null(On(With(AnchorKind.WPrime, one => one with { Value = 0 })).WPrime);
+        Assert.Null(PowerCapacity.On(Given.Date, "p1", Given.Anchors(With(AnchorKind.CriticalPower, one => one with { Value = 0 }))));
+    }
+
     private static PowerCapacity On(Anchor[] anchors) => PowerCapacity.On(Given.Date, "p1", Given.Anchors(anchors))!;
 
     private static Anchor[] With(AnchorKind kind, Func<Anchor, Anchor> change) =>

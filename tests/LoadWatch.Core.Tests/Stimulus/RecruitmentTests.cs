@@ -27,7 +27,8 @@ public class RecruitmentTests
     }
 
     /// <summary>
-    /// Critical power at 80 % of VO2max, fresh. Computed independently, and within 0.12 of the order of glycogen data (Vollestad and Blom 1985, from memory):
+    /// Critical power at 80 % of VO2max, fresh. Computed independently, and within 0.12 of the order of glycogen data (Vollestad and Blom
+    /// 1985, from memory):
     /// about .2 and .65 of the medium class at 43 and 61 %, all of it at 75 %, about half of the largest at 91 %.
     /// </summary>
     [Theory]

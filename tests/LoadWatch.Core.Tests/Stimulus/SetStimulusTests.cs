@@ -1,3 +1,4 @@
+using CsCheck;
 using LoadWatch.People;
 using LoadWatch.Recordings;
 
@@ -7,7 +8,8 @@ public class SetStimulusTests
 {
     private static readonly Anchor Maximum = Given.Anchor(AnchorKind.OneRepetitionMax, 100, Given.Date.PlusDays(-56), exercise: "squat");
 
-    /// <summary>Computed independently from the stated equations: percent of the maximum, repetitions, in reserve; hard repetitions, largest class summed.</summary>
+    /// <summary>Computed independently from the stated equations: percent of the maximum, repetitions, in reserve; hard repetitions,
+    /// largest class summed.</summary>
     [Theory]
     [InlineData(80, 8, 0, 8, 8.0)]
     [InlineData(70, 10, 2, 10, 8.73)]
@@ -84,6 +86,20 @@ public class SetStimulusTests
         Assert.Null(demand);
         Assert.NotNull(missing);
     }
+
+    [Fact]
+    public void BandsAndClassesAreAlwaysOrderedAndMoreReserveNeverRaisesThem() =>
+        Gen.Select(Gen.Int[1, 40], Gen.Double[1, 150], Gen.Double[0, 20]).Sample((repetitions, kilograms, reserve) =>
+        {
+            var region = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", repetitions, kilograms, reserve), Maximum)!], []);
+            var further = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", repetitions, kilograms, reserve + 1), Maximum)!], []);
+            Band[] bands = [region.HardRepetitions!.Value, region.SlowSeconds!.Value, region.MediumSeconds!.Value, region.LargeSeconds!.Value];
+            return Array.TrueForAll(bands, band => band.Low >= 0 && band.Low <= band.Mid && band.Mid <= band.High && band.High <= repetitions)
+                && region.SlowSeconds.Value.Mid >= region.MediumSeconds.Value.Mid
+                && region.MediumSeconds.Value.Mid >= region.LargeSeconds.Value.Mid
+                && region.LargeSeconds.Value.Mid >= further.LargeSeconds!.Value.Mid
+                && region.HardRepetitions.Value.Mid >= further.HardRepetitions!.Value.Mid;
+        });
 
     private static SetDemand? Demand(StrengthSet set, params Anchor[] anchors) =>
         SetDemand.Of(set, Given.Date, "p1", Given.Anchors(anchors)).Demand;

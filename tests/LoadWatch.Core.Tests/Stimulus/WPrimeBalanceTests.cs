@@ -17,7 +17,8 @@ public class WPrimeBalanceTests
     public void TheTimeConstantFallsWithTheDistanceToCriticalPower(double watts, double seconds) =>
         Assert.Equal(seconds, WPrimeBalance.Tau(watts), 5.1e-3);
 
-    /// <summary>Computed independently in steps of 1 s: 350 W for 60 s, 150 W for 60 s, 350 W for 60 s, 150 W for 120 s; critical power 250 W, W' 20 kJ.</summary>
+    /// <summary>Computed independently in steps of 1 s: 350 W for 60 s, 150 W for 60 s, 350 W for 60 s, 150 W for 120 s; critical power
+    /// 250 W, W' 20 kJ.</summary>
     [Theory]
     [InlineData(60, 14329.68)]
     [InlineData(120, 14951.15)]
@@ -34,7 +35,8 @@ public class WPrimeBalanceTests
     public void WithoutASecondBelowCriticalPowerNothingRecovers() =>
         Assert.Equal(20_000 - (60 * 100), WPrimeBalance.Of(Given.Samples((350, 60)), 250, 20_000)[60], 1e-9);
 
-    /// <summary>By hand: 10 s at 350 W spend 1000 J; a stop of 600 s recovers with the time constant of 150 W (516.86 s), and the 10 s that the last reading stands for are the only ones that count.</summary>
+    /// <summary>By hand: 10 s at 350 W spend 1000 J; a stop of 600 s recovers with the time constant of 150 W (516.86 s), and the 10 s
+    /// that the last reading stands for are the only ones that count.</summary>
     [Fact]
     public void AStopRecoversButDoesNotSpend()
     {

@@ -156,10 +156,10 @@ public class FitSessionTests
     [Fact]
     public void TheDeviceFillsWhatTheFilesOwnWordsLeaveOpen()
     {
-        var decoded = new FitPartWriter().Define(15, new(0, new(0, Enumeration), new(1, Unsigned16))).Message(15, 4, 255)
+        var decoded = new FitPartWriter().Define(15, new(0, new(0, Enumeration), new(1, Unsigned16), new(2, Unsigned16))).Message(15, 4, FitValue.None, 7)
             .Define(2, new(23, new(0, Unsigned8), new(2, Unsigned16), new(4, Unsigned16), new(3, Unsigned32Z)))
             .Message(2, 1, 9, 9, 9).Message(2, 0, 8, 12, 4000000000)
             .DefineRecord().Message(0, Parts.Base, 90).Decode();
-        Assert.Equal(new Device(255, 12, 4000000000), Assert.Single(decoded.Recordings).Device);
+        Assert.Equal(new Device(8, 7, 4000000000), Assert.Single(decoded.Recordings).Device);
     }
 }

@@ -1,0 +1,113 @@
+using LoadWatch.Alerts;
+using LoadWatch.Findings;
+using LoadWatch.People;
+using NodaTime;
+
+namespace LoadWatch.Notices;
+
+/// <summary>Builds one contact's brief from what is known. Pure: the same values give the same brief, whatever their order.</summary>
+public static class BriefBuilder
+{
+    /// <summary>People to act on that one brief names; the rest is counted.</summary>
+    public const int FlaggedAtMost = 10;
+
+    /// <param name="date">The contact's local date on which the brief is due.</param>
+    /// <param name="subjects">People; those outside the contact's groups or people are left out.</param>
+    /// <param name="questions">Files held or refused and other things that need an answer.</param>
+    public static Brief Build(Contact contact, LocalDate date, IReadOnlyList<BriefSubject> subjects, IReadOnlyList<BriefLine> questions)
+    {
+        var shown = Shown(contact, subjects);
+        var self = contact.Role == ContactRole.Self && shown.Count == 1;
+        var upTo = shown.Where(subject => subject.Days.Count > 0).Max(subject => (LocalDate?)subject.Days[^1].Date);
+        var flagged = shown.Where(ToLookAt).OrderByDescending(Worst).ToList();
+        return new Brief
+        {
+            ContactId = contact.Id,
+            ContactName = OneLine.Of(contact.Name),
+            Date = date,
+            DataUpTo = upTo,
+            FirstLine = FirstLine.Of(shown, flagged, upTo, questions.Count, self),
+            Flagged = [.. flagged.Take(FlaggedAtMost).Select(subject => Flag(subject, contact.Role, self))],
+            FlaggedBeyond = Math.Max(0, flagged.Count - FlaggedAtMost),
+            Returned = [.. shown.SelectMany(subject => Returned(subject, self))],
+            Questions = [.. questions.Select(line => new BriefLine(OneLine.Of(line.Subject), OneLine.Sentence(line.Sentence)))],
+            Groups = Groups(contact, shown, upTo ?? date.PlusDays(-1), self),
+        };
+    }
+
+    internal static bool IsActive(AlertNews news) => news.Alert.State is AlertState.Unacknowledged or AlertState.Acknowledged;
+
+    /// <summary>Active alerts, warnings first, then by rule and region.</summary>
+    internal static IEnumerable<AlertNews> Active(BriefSubject subject) => subject.Alerts
+        .Where(IsActive)
+        .OrderByDescending(news => news.Alert.Severity)
+        .ThenBy(news => RuleTexts.Order(news.Alert.Key.Rule))
+        .ThenBy(news => news.Alert.Id, StringComparer.Ordinal);
+
+    /// <summary>The name to show: the person's own, or "You".</summary>
+    internal static string NameOf(Person person, bool self) => self ? "You" : OneLine.Of(person.Name);
+
+    /// <summary>An acknowledged alert asks for nothing more; it stays beside one that does, and in the group's table.</summary>
+    internal static bool ToLookAt(BriefSubject subject) =>
+        subject.Alerts.Any(news => IsActive(news) && (news.IsNew || news.Alert.State == AlertState.Unacknowledged));
+
+    private static List<BriefSubject> Shown(Contact contact, IReadOnlyList<BriefSubject> subjects) =>
+    [
+        .. subjects
+            .Where(subject => contact.People.Count > 0
+                ? contact.People.Contains(subject.Person.Id, StringComparer.OrdinalIgnoreCase)
+                : contact.Groups.Contains(subject.Group.Id, StringComparer.Ordinal))
+            .DistinctBy(subject => subject.Person.Id, StringComparer.OrdinalIgnoreCase)
+            .OrderBy(subject => OneLine.Of(subject.Person.Name), StringComparer.OrdinalIgnoreCase)
+            .ThenBy(subject => subject.Person.Id, StringComparer.OrdinalIgnoreCase),
+    ];
+
+    private static Severity Worst(BriefSubject subject) => subject.Alerts.Where(IsActive).Max(news => news.Alert.Severity);
+
+    private static FlaggedPerson Flag(BriefSubject subject, ContactRole role, bool self) =>
+        new(subject.Person.Id, NameOf(subject.Person, self), Worst(subject), [.. Active(subject).Select(news => Reason(news, role, self))]);
+
+    private static FlaggedReason Reason(AlertNews news, ContactRole role, bool self) => new(
+        news.Alert.Id,
+        news.Alert.Key.Rule,
+        news.Alert.Key.Region,
+        news.Alert.Severity,
+        OneLine.Sentence(news.Alert.Text),
+        RuleTexts.Consider(news.Alert.Key, self),
+        RuleTexts.Decides(role),
+        news.IsNew,
+        news.Alert.State == AlertState.Acknowledged);
+
+    private static IEnumerable<BriefLine> Returned(BriefSubject subject, bool self) => subject.Alerts
+        .Where(news => news.ReturnedSince && !IsActive(news))
+        .OrderBy(news => RuleTexts.Order(news.Alert.Key.Rule))
+        .ThenBy(news => news.Alert.Id, StringComparer.Ordinal)
+        .Select(news => RuleTexts.Returned(news, subject.Group.Limits, self))
+        .Distinct(StringComparer.Ordinal)
+        .Select(sentence => new BriefLine(NameOf(subject.Person, self), OneLine.Sentence(sentence)));
+
+    private static IReadOnlyList<BriefGroup> Groups(Contact contact, List<BriefSubject> shown, LocalDate upTo, bool self) =>
+    [
+        .. shown
+            .GroupBy(subject => subject.Group.Id, StringComparer.Ordinal)
+            .OrderBy(group => Place(contact.Groups, group.Key))
+            .ThenBy(group => group.Key, StringComparer.Ordinal)
+            .Select(group => Table(group.First().Group, group, upTo, self)),
+    ];
+
+    private static BriefGroup Table(Group group, IEnumerable<BriefSubject> members, LocalDate upTo, bool self) =>
+        new(group.Id, OneLine.Of(group.Name), LoadUnits.Of(group.LoadQuantity), [.. members.Select(member => BriefRows.Of(member, upTo, self))]);
+
+    private static int Place(IReadOnlyList<string> order, string id)
+    {
+        for (var place = 0; place < order.Count; place++)
+        {
+            if (string.Equals(order[place], id, StringComparison.Ordinal))
+            {
+                return place;
+            }
+        }
+
+        return order.Count;
+    }
+}

@@ -1,0 +1,100 @@
+using LoadWatch.Days;
+using LoadWatch.Stimulus;
+using NodaTime;
+
+namespace LoadWatch.Notices;
+
+/// <summary>A person's row in the group's table.</summary>
+internal static class BriefRows
+{
+    /// <summary>Days in the strip beside a name.</summary>
+    public const int StripDays = 28;
+
+    private const int WeekDays = 7;
+    private const int RemarksShown = 2;
+
+    /// <param name="upTo">The last date of the brief; dates without a day are unknown.</param>
+    public static BriefRow Of(BriefSubject subject, LocalDate upTo, bool self)
+    {
+        var days = subject.Days.ToDictionary(day => day.Date);
+        var today = days.GetValueOrDefault(upTo);
+        var legs = today?.Regions.GetValueOrDefault(BodyRegion.Legs);
+        var known = Enumerable.Range(0, WeekDays).Count(back => days.GetValueOrDefault(upTo.PlusDays(-back))?.Load is not null);
+        return new BriefRow(
+            subject.Person.Id,
+            BriefBuilder.NameOf(subject.Person, self),
+            BriefBuilder.ToLookAt(subject),
+            subject.Days.Where(day => day.State == DayState.Recorded).Max(day => (LocalDate?)day.Date),
+            today?.Acute,
+            today?.ChronicBefore,
+            today?.RatioUncoupled,
+            known,
+            EverHeavy(days, upTo, legs) ? legs?.DaysSince : null,
+            legs?.Days28,
+            [.. Enumerable.Range(1 - StripDays, StripDays).Select(offset => Strip(days, upTo.PlusDays(offset)))],
+            Remark(subject, today, known, NeverHeavy(days, upTo, legs)));
+    }
+
+    private static BriefDay Strip(Dictionary<LocalDate, Day> days, LocalDate date)
+    {
+        var day = days.GetValueOrDefault(date);
+        return new BriefDay(
+            date,
+            day is not null && day.State != DayState.Unknown,
+            day?.Load,
+            day?.Regions.GetValueOrDefault(BodyRegion.Legs)?.HeavyOrFast);
+    }
+
+    private static bool EverHeavy(Dictionary<LocalDate, Day> days, LocalDate upTo, RegionDay? legs) =>
+        legs?.DaysSince is not null && NeverHeavy(days, upTo, legs) is null;
+
+    /// <summary>Days without any, where the count began at the first covered day instead of at a heavy-or-fast one; else null.</summary>
+    private static int? NeverHeavy(Dictionary<LocalDate, Day> days, LocalDate upTo, RegionDay? legs)
+    {
+        if (legs?.DaysSince is not { } since || !days.TryGetValue(upTo.PlusDays(-since), out var start))
+        {
+            return null;
+        }
+
+        return start.Regions.GetValueOrDefault(BodyRegion.Legs)?.HeavyOrFast == true ? null : since;
+    }
+
+    private static string? Remark(BriefSubject subject, Day? today, int knownOf7, int? neverHeavyDays)
+    {
+        var given = subject.Remarks.Select(OneLine.Of).Where(remark => remark.Length > 0).Distinct(StringComparer.Ordinal).ToList();
+        var all = Own(subject, today, knownOf7, neverHeavyDays)
+            .Concat(given.Take(RemarksShown))
+            .Concat(given.Count > RemarksShown ? [$"{given.Count - RemarksShown} more of the kind"] : Array.Empty<string>());
+        var remark = string.Join("; ", all);
+        return remark.Length == 0 ? null : remark;
+    }
+
+    private static IEnumerable<string> Own(BriefSubject subject, Day? today, int knownOf7, int? neverHeavyDays)
+    {
+        foreach (var news in BriefBuilder.ToLookAt(subject) ? [] : BriefBuilder.Active(subject))
+        {
+            yield return $"seen before and still standing: {RuleTexts.Named(news.Alert.Key, self: false)}";
+        }
+
+        if (subject.Days.All(day => day.State != DayState.Recorded))
+        {
+            yield return "nothing recorded yet";
+            yield break;
+        }
+
+        if (today?.Acute is null)
+        {
+            yield return $"load known on {knownOf7} of the last 7 days, 5 wanted";
+        }
+
+        if (today?.ChronicBefore is null)
+        {
+            yield return "too few known days for a usual week";
+        }
+
+        if (neverHeavyDays is { } days)
+        {
+            yield return $"no heavy or fast leg work seen in {days + 1} days on record";
+        }
+    }
+}

@@ -1,0 +1,80 @@
+using LoadWatch.Alerts;
+using LoadWatch.Findings;
+using NodaTime;
+
+namespace LoadWatch.Notices;
+
+/// <summary>The line that is read in five seconds, without names.</summary>
+internal static class FirstLine
+{
+    /// <param name="shown">Everybody in the brief.</param>
+    /// <param name="flagged">Those to act on.</param>
+    /// <param name="upTo">The last date looked at.</param>
+    /// <param name="questions">Things that need an answer, count.</param>
+    public static string Of(IReadOnlyList<BriefSubject> shown, IReadOnlyList<BriefSubject> flagged, LocalDate? upTo, int questions, bool self)
+    {
+        var sentences = new[]
+        {
+            self ? OfOne(shown[0], flagged.Count > 0) : OfMany(shown.Count, flagged),
+            SeenEarlier(shown, self),
+            Unseen(shown, upTo, self),
+            Questions(questions),
+        };
+        return string.Join(' ', sentences.Where(sentence => sentence is not null));
+    }
+
+    private static string OfOne(BriefSubject subject, bool flagged) => flagged
+        ? $"To look at: {string.Join("; ", BriefBuilder.Active(subject).Select(news => RuleTexts.Named(news.Alert.Key, self: true)))}."
+        : "All quiet: nothing to act on.";
+
+    private static string OfMany(int people, IReadOnlyList<BriefSubject> flagged) => (people, flagged.Count) switch
+    {
+        (0, _) => "Nobody is in this brief yet.",
+        (_, 0) => $"All quiet: {People(people)}, nothing to act on.",
+        _ => $"{flagged.Count} of {people} to look at: {string.Join(", ", Counts(flagged))}.",
+    };
+
+    /// <summary>Each person once, under the gravest reason, so that the counts add up.</summary>
+    private static IEnumerable<string> Counts(IReadOnlyList<BriefSubject> flagged) => flagged
+        .Select(subject => BriefBuilder.Active(subject).First().Alert.Key)
+        .GroupBy(key => RuleTexts.Counted(key), StringComparer.Ordinal)
+        .OrderBy(group => RuleTexts.Order(group.First().Rule))
+        .ThenBy(group => group.First().Region)
+        .ThenBy(group => group.Key, StringComparer.Ordinal)
+        .Select(group => $"{group.Count()} {group.Key}");
+
+    private static string? SeenEarlier(IReadOnlyList<BriefSubject> shown, bool self)
+    {
+        var seen = shown.Count(subject => subject.Alerts.Any(BriefBuilder.IsActive) && !BriefBuilder.ToLookAt(subject));
+        return (seen, self) switch
+        {
+            (0, _) => null,
+            (_, true) => "What you have seen before still stands.",
+            (1, _) => "1 other seen before still stands.",
+            _ => $"{seen} others seen before still stand.",
+        };
+    }
+
+    /// <summary>Quiet without data is not quiet: who is not flagged and has no known day in the last 7 is counted (I-6).</summary>
+    private static string? Unseen(IReadOnlyList<BriefSubject> shown, LocalDate? upTo, bool self)
+    {
+        var unseen = shown.Count(subject => !subject.Alerts.Any(BriefBuilder.IsActive) && !subject.Days.Any(day => day.Load is not null && IsRecent(day.Date, upTo)));
+        return (unseen, self) switch
+        {
+            (0, _) => null,
+            (_, true) => "No day of the last week is known, though.",
+            _ => $"Of {unseen} no day of the last week is known.",
+        };
+    }
+
+    private static bool IsRecent(LocalDate date, LocalDate? upTo) => upTo is { } last && date > last.PlusDays(-7) && date <= last;
+
+    private static string? Questions(int count) => count switch
+    {
+        0 => null,
+        1 => "1 file needs an answer.",
+        _ => $"{count} files need an answer.",
+    };
+
+    private static string People(int count) => count == 1 ? "1 person" : $"{count} people";
+}

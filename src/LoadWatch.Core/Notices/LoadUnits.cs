@@ -1,0 +1,18 @@
+using LoadWatch.Loads;
+
+namespace LoadWatch.Notices;
+
+/// <summary>The unit that stands over a column of loads.</summary>
+internal static class LoadUnits
+{
+    /// <summary>The unit of a built-in quantity; for any other its name in words.</summary>
+    public static string Of(string quantity) => quantity switch
+    {
+        QuantityNames.BanisterTrimp or QuantityNames.EdwardsLoad => "AU",
+        QuantityNames.Minutes => "min",
+        QuantityNames.Distance => "m",
+        QuantityNames.Work => "kJ",
+        QuantityNames.Kilograms => "kg",
+        _ => OneLine.Of(quantity.Replace('_', ' ')),
+    };
+}

@@ -1,0 +1,35 @@
+namespace LoadWatch.Notices;
+
+/// <summary>What every brief explains and cautions, the same in text and on the page.</summary>
+public static class ReadingNotes
+{
+    public static IReadOnlyList<ReadingNote> Terms { get; } =
+    [
+        new("Load", "the quantity that the group watches, summed over sessions; AU is training impulse, minutes weighted by heart rate. "
+            + "The week is the last 7 days, scaled up when a day or two of it are unknown."),
+        new("Usual", "the mean week of the 21 days before those 7. \u201CTimes usual\u201D is the week divided by it."),
+        new("Heavy-or-fast leg day", "a day with enough hard work of the legs (heavy sets, sprints, efforts well above a steady hard pace) to call on "
+            + "the large, fast motor units. Estimated, never measured."),
+        new("Known days", "days of the last 7 whose load is known. A rest day is known."),
+        new("Unknown", "nothing came in, or it could not be computed. It is never counted as nought, and alone it raises or clears "
+            + "nothing but the line about missing recordings."),
+    ];
+
+    public static IReadOnlyList<string> Cautions { get; } =
+    [
+        "This page describes training data. It does not diagnose, does not foretell injury, clears nobody to train, and "
+            + "is not meant for selection or contracts. The person and the responsible coach or clinician decide.",
+        "Chest pain, fainting, palpitations, unusual breathlessness, severe headache, a swollen calf, a fall or a blow "
+            + "to the head, new weakness: medical help at once.",
+        "No hard work with fever. No catching up after a gap: sudden hard or lengthening work can break down muscle, and "
+            + "dark urine is an emergency.",
+        "Heavy straining needs a clinician\u2019s word with uncontrolled blood pressure, an aneurysm, recent surgery, a "
+            + "hernia, fragile bones, eye disease or eye surgery, in pregnancy and after birth; so does hard work with "
+            + "glucose-lowering drugs, in heat and under 18. Heart-rate figures do not hold under drugs that slow the heart, "
+            + "with arrhythmia or a pacemaker.",
+        "High-force work for older or ill people follows their clinician and local guidelines.",
+    ];
+}
+
+/// <summary>One explained word.</summary>
+public sealed record ReadingNote(string Term, string Meaning);

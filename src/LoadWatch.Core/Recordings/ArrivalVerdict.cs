@@ -1,0 +1,55 @@
+using NodaTime;
+
+namespace LoadWatch.Recordings;
+
+/// <summary>What becomes of an arrival: its state and the reason shown with it. Pure.</summary>
+/// <param name="Person">Id of the owner where stored, else null.</param>
+public sealed record ArrivalVerdict(ArrivalState State, string? Reason, string? Person)
+{
+    /// <summary>No recording can be older: devices that lost their clock write earlier dates.</summary>
+    private static readonly Instant Earliest = Instant.FromUtc(2000, 1, 1, 0, 0);
+
+    /// <summary>
+    /// Judges decoded content. Refused when nothing but errors came out, aside when it is whole but holds no training, held when a date or one owner is
+    /// missing, else stored; a stored one names its first problem.
+    /// </summary>
+    /// <param name="claims">Ids of the people whom its sightings name.</param>
+    /// <param name="now">A session cannot begin more than a day after it.</param>
+    public static ArrivalVerdict Of(DecodedFile file, IReadOnlyCollection<string> claims, Instant now)
+    {
+        if (file.Recordings.Count == 0)
+        {
+            return WithoutRecordings(file);
+        }
+
+        if (file.Recordings.All(recording => recording.Start is null))
+        {
+            return new ArrivalVerdict(ArrivalState.Held, "no date: the device wrote its uptime instead of the time of day", null);
+        }
+
+        if (!file.Recordings.Any(recording => IsUsable(recording, now)))
+        {
+            return new ArrivalVerdict(ArrivalState.Held, $"date implausible: starts {file.Recordings[0].Start:uuuu-MM-dd}", null);
+        }
+
+        return claims.Count switch
+        {
+            0 => new ArrivalVerdict(ArrivalState.Held, "owner unknown: no folder above it is named after a person of the roster", null),
+            1 => new ArrivalVerdict(ArrivalState.Stored, file.Problems.Count > 0 ? file.Problems[0].ToString() : null, claims.Single()),
+            _ => new ArrivalVerdict(
+                ArrivalState.Held, $"claimed by {string.Join(" and ", claims.Order(StringComparer.Ordinal))}", null),
+        };
+    }
+
+    /// <summary>Whether a recording carries a plausible date and so counts once its arrival is stored.</summary>
+    public static bool IsUsable(Recording recording, Instant now) =>
+        recording.Start is { } start && start >= Earliest && start <= now + Duration.FromDays(1);
+
+    private static ArrivalVerdict WithoutRecordings(DecodedFile file)
+    {
+        var error = file.Problems.FirstOrDefault(problem => problem.Severity == ProblemSeverity.Error);
+        return error is not null
+            ? new ArrivalVerdict(ArrivalState.Refused, error.ToString(), null)
+            : new ArrivalVerdict(ArrivalState.Aside, $"no training in it: {file.FileType ?? file.Kind}", null);
+    }
+}

@@ -1,0 +1,22 @@
+namespace LoadWatch.Decoding.Containers;
+
+/// <summary>How much a container may hold (I-11). Whatever is beyond a limit is refused before it is unpacked that far.</summary>
+public sealed record ContainerLimits
+{
+    /// <summary>Bytes that one member unpacks to. Default 32 MB.</summary>
+    public int MemberBytes { get; init; } = 32 << 20;
+
+    /// <summary>Bytes that all members of one container unpack to. Default 200 MB.</summary>
+    public long TotalBytes { get; init; } = 200L << 20;
+
+    /// <summary>Entries of a zip file, folders among them. Default 10,000.</summary>
+    public int Entries { get; init; } = 10_000;
+
+    /// <summary>Unpacked over packed size of one member. Default 200.</summary>
+    public int Ratio { get; init; } = 200;
+
+    /// <summary>Members that unpack to no more than this many bytes may have any ratio. Default 1 MB.</summary>
+    public int RatioFreeBytes { get; init; } = 1 << 20;
+
+    internal bool IsBomb(long unpacked, long packed) => unpacked > RatioFreeBytes && unpacked > packed * Ratio;
+}

@@ -1,0 +1,110 @@
+using System.Diagnostics.CodeAnalysis;
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Decoding.Csv;
+
+/// <summary>What the rows of a CSV are.</summary>
+public enum CsvKind
+{
+    /// <summary>A time series: one row per moment of one session.</summary>
+    Samples,
+}
+
+/// <summary>
+/// Describes one kind of CSV file, so that nothing about it is guessed. A file has a layout when its first line holds every name of
+/// <see cref="Header"/>, the time column and at least one channel column. Names are compared exactly, without the blanks around them.
+/// </summary>
+public sealed record CsvLayout
+{
+    /// <summary>The layout's name, shown as the source of what it read. No default.</summary>
+    public string Name { get; init; } = "";
+
+    /// <summary>What the rows are. Default <c>samples</c>.</summary>
+    public CsvKind Kind { get; init; } = CsvKind.Samples;
+
+    /// <summary>
+    /// The signature: column names that must all be present. Of several layouts that fit, the one with the longest signature wins. No
+    /// default.
+    /// </summary>
+    public IReadOnlyList<string> Header { get; init; } = [];
+
+    /// <summary>The character between two fields. Default a comma. A first line <c>sep=;</c> in the file goes before it.</summary>
+    public char Delimiter { get; init; } = ',';
+
+    /// <summary>The decimal mark of numbers, <c>.</c> or <c>,</c>. Default a full stop. Thousands marks are never read.</summary>
+    [SuppressMessage("Naming", "CA1720:Identifier contains type name", Justification = "The word of the configuration key")]
+    public char Decimal { get; init; } = '.';
+
+    /// <summary>
+    /// <c>auto</c>, <c>utf-8</c>, <c>utf-16</c> (little endian) or <c>windows-1252</c>. Default <c>auto</c>: UTF-8 where the bytes are
+    /// valid
+    /// UTF-8, else Windows-1252. A byte order mark in the file goes before it.
+    /// </summary>
+    public string Encoding { get; init; } = CsvText.Auto;
+
+    /// <summary>Where the time of a row stands. No default.</summary>
+    public CsvTimeColumn Time { get; init; } = new();
+
+    /// <summary>The columns that hold readings. One that is not in <see cref="Header"/> may be absent from a file. No default.</summary>
+    public IReadOnlyList<CsvChannelColumn> Columns { get; init; } = [];
+
+    /// <summary>
+    /// The sport of every file, in the words of the FIT profile (<c>cycling</c>). Default null: see <see cref="SportColumn"/>.
+    /// </summary>
+    public string? Sport { get; init; }
+
+    /// <summary>
+    /// The column whose first filled cell names the sport; may be absent from a file. Default null; without either the sport is
+    /// <c>generic</c>.
+    /// </summary>
+    public string? SportColumn { get; init; }
+
+    /// <summary>Why this layout cannot be used, one sentence each; empty when it can.</summary>
+    public IReadOnlyList<string> Validate() => CsvLayoutCheck.Reasons(this);
+}
+
+/// <summary>Where the time of a row stands and how it is written.</summary>
+public sealed record CsvTimeColumn
+{
+    public const string Iso8601 = "iso8601";
+    public const string UnixSeconds = "unix_s";
+    public const string UnixMilliseconds = "unix_ms";
+    public const string SecondsFromStart = "seconds_from_start";
+
+    /// <summary>The column's name. No default.</summary>
+    public string Column { get; init; } = "";
+
+    /// <summary>
+    /// <c>iso8601</c>, <c>unix_s</c>, <c>unix_ms</c>, <c>seconds_from_start</c>, or a NodaTime pattern that holds a full date and time
+    /// (<c>dd.MM.yyyy HH:mm:ss</c>). Default <c>iso8601</c>.
+    /// </summary>
+    public string Format { get; init; } = Iso8601;
+
+    /// <summary>
+    /// The IANA zone of local times (<c>Europe/Helsinki</c>). Default null: UTC. An offset written in the cell goes before it.
+    /// </summary>
+    public string? Zone { get; init; }
+
+    /// <summary>
+    /// For <c>seconds_from_start</c>: the column that holds the start of the session; the first filled cell counts. Default null.
+    /// </summary>
+    public string? StartColumn { get; init; }
+
+    /// <summary>How the start is written: any format but <c>seconds_from_start</c>. Default <c>iso8601</c>.</summary>
+    public string StartFormat { get; init; } = Iso8601;
+}
+
+/// <summary>A column that holds the readings of a channel.</summary>
+public sealed record CsvChannelColumn
+{
+    /// <summary>The column's name. No default.</summary>
+    public string Column { get; init; } = "";
+
+    /// <summary>The channel. Default <c>heart_rate</c>.</summary>
+    public Channel Channel { get; init; }
+
+    /// <summary>
+    /// The unit of the cells: <c>bpm</c>, <c>W</c>, <c>m/s</c> or <c>km/h</c>, <c>rpm</c>, <c>m</c> or <c>km</c>. No default.
+    /// </summary>
+    public string Unit { get; init; } = "";
+}

@@ -1,0 +1,91 @@
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Decoding.Csv;
+
+/// <summary>A text with the names of its columns, read with one encoding and one separator.</summary>
+/// <param name="Separator">The one in use: a first line <c>sep=;</c> goes before the layout's.</param>
+/// <param name="RowsAbove">Rows up to the names, these included.</param>
+/// <param name="Line">The line of the names; null without any.</param>
+/// <param name="Fault">Why the names could not be read, or null.</param>
+internal sealed record CsvTable(CsvText Text, char Separator, int RowsAbove, long? Line, IReadOnlyList<string> Names, Problem? Fault)
+{
+    private const int ShownCharacters = 200;
+
+    public static CsvTable Open(ReadOnlyMemory<byte> bytes, string encoding, char separator)
+    {
+        var text = CsvText.Of(bytes, encoding);
+        using var rows = new CsvRows(text, separator);
+        if (!rows.Next())
+        {
+            return new(text, separator, 0, null, [], rows.Fault ?? new Problem(ProblemSeverity.Error, "the file is empty", Line: 1));
+        }
+
+        return StatedSeparator(rows, separator) is { } stated ? OpenBelow(text, stated) : At(text, separator, rowsAbove: 1, rows);
+    }
+
+    /// <summary>The rows below the names.</summary>
+    public CsvRows Rows()
+    {
+        var rows = new CsvRows(Text, Separator);
+        for (var row = 0; row < RowsAbove; row++)
+        {
+            rows.Next();
+        }
+
+        return rows;
+    }
+
+    /// <summary>The column of a name, or null.</summary>
+    public int? Find(string? name)
+    {
+        for (var index = 0; index < Names.Count; index++)
+        {
+            if (Names[index] == name)
+            {
+                return index;
+            }
+        }
+
+        return null;
+    }
+
+    public bool Has(string name) => Find(name) is not null;
+
+    /// <summary>A row that cannot be used because of a cell.</summary>
+    public Problem Wrong(CsvRows rows, int column, string reason) =>
+        new(ProblemSeverity.Error, reason, Line: rows.Line, Column: column + 1, Field: Names[column]);
+
+    /// <summary>The names for a message: cut to a readable length, without control characters.</summary>
+    public string ShownNames()
+    {
+        var shown = string.Join(", ", Names.Take(50));
+        shown = string.Concat(shown.Take(ShownCharacters).Select(c => char.IsControl(c) ? '?' : c));
+        return shown.Length == ShownCharacters || Names.Count > 50 ? shown + "..." : shown;
+    }
+
+    private static CsvTable OpenBelow(CsvText text, char separator)
+    {
+        using var rows = new CsvRows(text, separator);
+        rows.Next();
+        return rows.Next()
+            ? At(text, separator, rowsAbove: 2, rows)
+            : new(text, separator, 1, null, [], rows.Fault ?? new Problem(ProblemSeverity.Error, "no line of column names", Line: 2));
+    }
+
+    private static CsvTable At(CsvText text, char separator, int rowsAbove, CsvRows rows) =>
+        new(text, separator, rowsAbove, rows.Line, [.. Enumerable.Range(0, rows.CellCount).Select(rows.Text)], Fault: null);
+
+    /// <summary>Of a first line <c>sep=;</c>, whether or not the reader has cut it in two.</summary>
+    private static char? StatedSeparator(CsvRows rows, char separator)
+    {
+        var first = rows.Text(0);
+        return (rows.CellCount, first.Length) switch
+        {
+            _ when !first.StartsWith("sep=", StringComparison.OrdinalIgnoreCase) => null,
+            (1, 5) when char.IsAscii(first[4]) => first[4],
+            (2, 4) when rows[1].IsEmpty => separator,
+            (1, 4) => '\t',
+            _ => null,
+        };
+    }
+}

@@ -1,0 +1,180 @@
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Decoding.Csv;
+
+/// <summary>Reads the rows of one file by one layout.</summary>
+internal sealed class SampleReading
+{
+    // A day at 20 Hz and more; with every channel filled the columns stay near 110 MB.
+    private const int RowsAtMost = 2_000_000;
+
+    private readonly CsvTable table;
+    private readonly CsvLayout layout;
+    private readonly RowClock clock;
+    private readonly SampleColumns samples;
+    private readonly RowProblems problems = new();
+    private readonly ReadingCells readings;
+    private readonly SportCell sport;
+
+    public SampleReading(CsvTable table, CsvLayout layout)
+    {
+        this.table = table;
+        this.layout = layout;
+        clock = new RowClock(table, layout);
+        samples = new SampleColumns(Math.Clamp(table.Text.LinesAtMost() - table.RowsAbove, 0, RowsAtMost));
+        readings = new ReadingCells(table, layout);
+        sport = new SportCell(table, layout);
+    }
+
+    public DecodedFile Read()
+    {
+        if ((ReadRows() ?? TooManyBad()) is { } refusal)
+        {
+            return new("csv", FileType: null, layout.Name, [], [refusal, .. problems.Close()]);
+        }
+
+        return new("csv", FileType: null, layout.Name, [ToRecording()], [.. problems.Close(), .. clock.Warnings()]);
+    }
+
+    /// <summary>Null once all rows are read, else why the file cannot be used.</summary>
+    private Problem? ReadRows()
+    {
+        using var rows = table.Rows();
+        while (rows.Next())
+        {
+            if (HoldsNothing(rows))
+            {
+                continue;
+            }
+
+            if (samples.IsFull)
+            {
+                return Refusal($"more than {RowsAtMost} rows", rows.Line);
+            }
+
+            if (ReadRow(rows) is { } problem && PutAside(rows, problem) is { } refusal)
+            {
+                return refusal;
+            }
+        }
+
+        return rows.Fault;
+    }
+
+    /// <summary>Lists a row that gives no sample; not null where the file cannot be used because of it.</summary>
+    private Problem? PutAside(CsvRows rows, Problem problem)
+    {
+        var again = NamesAgain(rows);
+        switch (again?.Severity)
+        {
+            case null:
+                problems.AddBad(problem, rows.LineSpan);
+                return null;
+            case ProblemSeverity.Warning:
+                problems.Add(again);
+                return null;
+            default:
+                return again;
+        }
+    }
+
+    private static bool HoldsNothing(CsvRows rows)
+    {
+        for (var index = 0; index < rows.CellCount; index++)
+        {
+            if (!rows[index].IsEmpty)
+            {
+                return false;
+            }
+        }
+
+        return true;
+    }
+
+    private Problem? ReadRow(CsvRows rows)
+    {
+        if (ShapeProblem(rows) is { } shape)
+        {
+            return shape;
+        }
+
+        if (clock.Read(rows, out var problem) is not { } time || (problem = readings.Take(rows)) is not null)
+        {
+            return problem;
+        }
+
+        if (sport.Take(rows) is { } doubt)
+        {
+            problems.Add(doubt);
+        }
+
+        clock.Accept(time, rows.Line);
+        samples.Add(time.ToUnixTimeMilliseconds(), readings.Values);
+        return null;
+    }
+
+    private Problem? ShapeProblem(CsvRows rows)
+    {
+        if (rows.IsQuotedWrongly)
+        {
+            return Refusal("text behind a closing quote", rows.Line);
+        }
+
+        for (var index = table.Names.Count; index < rows.CellCount; index++)
+        {
+            if (!rows[index].IsEmpty)
+            {
+                return WrongCount(rows);
+            }
+        }
+
+        return rows.CellCount < table.Names.Count ? WrongCount(rows) : null;
+    }
+
+    /// <summary>
+    /// For a row of column names in the middle: a warning where they are those of the first line, an error where they are others.
+    /// </summary>
+    private Problem? NamesAgain(CsvRows rows)
+    {
+        var cells = Enumerable.Range(0, rows.CellCount).Select(rows.Text).ToList();
+        return cells switch
+        {
+            _ when !cells.Contains(layout.Time.Column) => null,
+            _ when cells.SequenceEqual(table.Names) =>
+                Refusal("the column names come again: rows above and below are taken as one session", rows.Line)
+                    with { Severity = ProblemSeverity.Warning },
+            _ => Refusal("other column names begin here: two files in one", rows.Line),
+        };
+    }
+
+    private Problem? TooManyBad()
+    {
+        var all = samples.Count + problems.BadLines;
+        return samples.Count switch
+        {
+            0 when all == 0 => Refusal("no rows below the column names", table.Line ?? 1),
+            0 => new Problem(ProblemSeverity.Error, $"none of {all} rows can be used"),
+            _ when problems.BadLines * 100 > all =>
+                new Problem(ProblemSeverity.Error, $"{problems.BadLines} of {all} rows cannot be used, more than 1 %"),
+            _ => null,
+        };
+    }
+
+    private Recording ToRecording()
+    {
+        var series = samples.ToSeries();
+        return new Recording
+        {
+            Part = 1,
+            Sport = sport.Found,
+            Start = series.First,
+            LocalOffset = clock.LocalOffset,
+            ElapsedSeconds = (series.Last - series.First)?.TotalSeconds,
+            Samples = series,
+        };
+    }
+
+    private Problem WrongCount(CsvRows rows) => Refusal($"{rows.CellCount} cells for {table.Names.Count} columns", rows.Line);
+
+    private static Problem Refusal(string reason, long line) => new(ProblemSeverity.Error, reason, Line: line);
+}

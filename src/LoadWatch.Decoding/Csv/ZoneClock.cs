@@ -1,0 +1,48 @@
+using NodaTime;
+
+namespace LoadWatch.Decoding.Csv;
+
+/// <summary>
+/// Places local times in a zone. A time that the clocks skipped moves on by the length of the gap; one that came twice is the earlier,
+/// unless the
+/// rows would then run backwards. Both are counted, with the first line of each.
+/// </summary>
+internal sealed class ZoneClock(DateTimeZone zone)
+{
+    public LineCount Skipped { get; } = new();
+
+    public LineCount Ambiguous { get; } = new();
+
+    public DateTimeZone Zone => zone;
+
+    public Instant Place(LocalDateTime local, Instant? previous, long line)
+    {
+        var mapping = zone.MapLocal(local);
+        switch (mapping.Count)
+        {
+            case 0:
+                Skipped.Add(line);
+                return zone.AtLeniently(local).ToInstant();
+            case 1:
+                return mapping.Single().ToInstant();
+            default:
+                Ambiguous.Add(line);
+                var early = mapping.First().ToInstant();
+                return early < previous ? mapping.Last().ToInstant() : early;
+        }
+    }
+}
+
+/// <summary>How many lines something held for, and the first of them.</summary>
+internal sealed class LineCount
+{
+    public long First { get; private set; }
+
+    public int Count { get; private set; }
+
+    public void Add(long line)
+    {
+        First = Count == 0 ? line : First;
+        Count++;
+    }
+}

@@ -1,0 +1,47 @@
+using System.Globalization;
+using System.Text;
+using LoadWatch.Notices;
+
+namespace LoadWatch.Delivery.Log;
+
+/// <summary>Notices as lines of one file a month, <c>notices-2026-03.txt</c>. It only grows; a notice that it holds whole is not written again.</summary>
+public sealed class NoticeFile(string folder) : INoticeChannel
+{
+    public string Name => "log";
+
+    public ChannelOutcome Deliver(Notice notice) => Append(folder, notice);
+
+    public static ChannelOutcome Append(string folder, Notice notice) =>
+        PrivateFolder.Use(folder, () => AppendTo(Path.Combine(folder, NameOf(notice)), notice));
+
+    private static string NameOf(Notice notice) => $"notices-{notice.Date.ToString("uuuu-MM", CultureInfo.InvariantCulture)}.txt";
+
+    private static void AppendTo(string path, Notice notice)
+    {
+        using var file = new FileStream(path, PrivateFolder.Options(FileMode.OpenOrCreate, FileAccess.ReadWrite));
+        var text = ReadAll(file);
+        if (!NoticeLines.Hold(EndedLines(text), notice))
+        {
+            file.Seek(0, SeekOrigin.End);
+            file.Write(Encoding.UTF8.GetBytes(Block(text, notice)));
+        }
+
+        // Also for a notice found here: the attempt that wrote it may not have come to its flush.
+        file.Flush(flushToDisk: true);
+    }
+
+    private static string ReadAll(FileStream file)
+    {
+        using var reader = new StreamReader(file, Encoding.UTF8, detectEncodingFromByteOrderMarks: true, bufferSize: -1, leaveOpen: true);
+        return reader.ReadToEnd();
+    }
+
+    /// <summary>Lines with their end; a last one without may be cut.</summary>
+    private static string[] EndedLines(string text) => text.ReplaceLineEndings("\n").Split('\n')[..^1];
+
+    private static string Block(string text, Notice notice)
+    {
+        var start = text.Length == 0 || text[^1] == '\n' ? "" : "\n";
+        return start + string.Join('\n', NoticeLines.Of(notice)) + "\n";
+    }
+}

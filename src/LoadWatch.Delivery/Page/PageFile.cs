@@ -1,0 +1,67 @@
+using System.Text;
+using LoadWatch.Notices;
+using NodaTime;
+using NodaTime.Text;
+
+namespace LoadWatch.Delivery.Page;
+
+/// <summary>
+/// The page on disk: <c>ada.html</c> is always the newest, <c>ada-2026-03-01.html</c> the one of a decided notice. A reader meets the old page or the new
+/// one, never half of one: it is written aside, flushed to the disk and renamed.
+/// </summary>
+public sealed class PageFile(string folder) : INoticeChannel
+{
+    private const int NameAtMost = 100;
+
+    public string Name => "page";
+
+    public ChannelOutcome Deliver(Notice notice)
+    {
+        if (!IsFileName(notice.ContactId))
+        {
+            return NoFileName;
+        }
+
+        return PrivateFolder.Use(folder, () =>
+        {
+            Replace(Path.Combine(folder, DatedName(notice.ContactId, notice.Date)), notice.Html);
+            if (!HasLater(folder, notice))
+            {
+                Replace(Path.Combine(folder, notice.ContactId + ".html"), notice.Html);
+            }
+        });
+    }
+
+    /// <summary>Rewrites a contact's newest page.</summary>
+    public static ChannelOutcome Write(string folder, string contactId, string html) => IsFileName(contactId)
+        ? PrivateFolder.Use(folder, () => Replace(Path.Combine(folder, contactId + ".html"), html))
+        : NoFileName;
+
+    private static ChannelOutcome NoFileName => ChannelOutcome.Failed(
+        $"the contact's id cannot name a file: up to {NameAtMost} of the letters a to z, digits, dash, underscore and dot, beginning with a letter or digit");
+
+    private static string DatedName(string contactId, LocalDate date) => $"{contactId}-{LocalDatePattern.Iso.Format(date)}.html";
+
+    /// <summary>A notice that got through late does not cover a younger page.</summary>
+    private static bool HasLater(string folder, Notice notice) => Directory
+        .EnumerateFiles(folder, $"{notice.ContactId}-????-??-??.html")
+        .Any(path => string.CompareOrdinal(Path.GetFileName(path), DatedName(notice.ContactId, notice.Date)) > 0);
+
+    private static void Replace(string path, string html)
+    {
+        var aside = path + ".part";
+        File.Delete(aside);
+        using (var file = new FileStream(aside, PrivateFolder.Options(FileMode.CreateNew, FileAccess.Write)))
+        {
+            file.Write(Encoding.UTF8.GetBytes(html));
+            file.Flush(flushToDisk: true);
+        }
+
+        File.Move(aside, path, overwrite: true);
+    }
+
+    private static bool IsFileName(string id) =>
+        id.Length is > 0 and <= NameAtMost
+        && char.IsAsciiLetterOrDigit(id[0])
+        && id.All(letter => char.IsAsciiLetterOrDigit(letter) || letter is '-' or '_' or '.');
+}

@@ -1,0 +1,103 @@
+using LoadWatch.Findings;
+using LoadWatch.Notices;
+
+namespace LoadWatch.Delivery.Page;
+
+/// <summary>What the template writes: text and shapes, already in words; it decides nothing.</summary>
+internal sealed record PageModel(
+    string Date,
+    string? DataUpTo,
+    string Contact,
+    string FirstLine,
+    IReadOnlyList<PagePerson> Flagged,
+    string? Beyond,
+    IReadOnlyList<BriefLine> Returned,
+    IReadOnlyList<BriefLine> Questions,
+    IReadOnlyList<PageGroup> Groups,
+    IReadOnlyList<ReadingNote> Terms,
+    IReadOnlyList<string> Cautions)
+{
+    public static PageModel Of(Brief brief)
+    {
+        var rows = brief.Groups
+            .SelectMany(group => group.Rows.Select(row => (Group: group, Row: row)))
+            .DistinctBy(pair => pair.Row.PersonId, StringComparer.Ordinal)
+            .ToDictionary(pair => pair.Row.PersonId, StringComparer.Ordinal);
+        return new PageModel(
+            BriefText.DateInWords(brief.Date),
+            brief.DataUpTo is { } upTo ? BriefText.DateInWords(upTo) : null,
+            OneLine.Of(brief.ContactName),
+            OneLine.Of(brief.FirstLine),
+            [.. brief.Flagged.Select(person => PagePerson.Of(person, rows.TryGetValue(person.PersonId, out var at) ? Strip.Of(at.Row, at.Group.LoadUnit) : null))],
+            brief.FlaggedBeyond > 0 ? BriefText.Beyond(brief.FlaggedBeyond) : null,
+            [.. brief.Returned.Select(Clean)],
+            [.. brief.Questions.Select(Clean)],
+            [.. brief.Groups.Select(PageGroup.Of)],
+            ReadingNotes.Terms,
+            ReadingNotes.Cautions);
+    }
+
+    private static BriefLine Clean(BriefLine line) => new(OneLine.Of(line.Subject), OneLine.Sentence(line.Sentence));
+}
+
+/// <summary>One person to act on.</summary>
+internal sealed record PagePerson(string Name, string Severity, IReadOnlyList<PageReason> Reasons, string Decides, Strip? Strip)
+{
+    public static PagePerson Of(FlaggedPerson person, Strip? strip) => new(
+        OneLine.Of(person.Name),
+        BriefText.SeverityWord(person.Severity),
+        [.. person.Reasons.Select(PageReason.Of)],
+        string.Join("; ", person.Reasons.Select(reason => reason.Decides).Distinct(StringComparer.Ordinal)),
+        strip);
+}
+
+/// <param name="Mark"><c>new</c>, <c>seen</c> or null.</param>
+internal sealed record PageReason(string Sentence, string Consider, string? Mark)
+{
+    public static PageReason Of(FlaggedReason reason) => new(
+        OneLine.Of(reason.Sentence),
+        OneLine.Of(reason.Consider),
+        (reason.IsNew, reason.IsSeen) switch
+        {
+            (true, _) => "new",
+            (_, true) => "seen",
+            _ => null,
+        });
+}
+
+internal sealed record PageGroup(string Name, string Unit, string People, IReadOnlyList<PageRow> Rows)
+{
+    public static PageGroup Of(BriefGroup group) => new(
+        OneLine.Of(group.Name),
+        OneLine.Of(group.LoadUnit),
+        group.Rows.Count == 1 ? "1 person" : $"{group.Rows.Count} people",
+        [.. group.Rows.Select(row => PageRow.Of(row, group.LoadUnit))]);
+}
+
+/// <summary>One row of a table; a number that is unknown is null, and the template says so.</summary>
+internal sealed record PageRow(
+    string Name,
+    bool Flagged,
+    string? Week,
+    string? Usual,
+    string? Times,
+    string Known,
+    string? LegsSince,
+    string? LegsDays,
+    string? Last,
+    Strip Strip,
+    string? Remark)
+{
+    public static PageRow Of(BriefRow row, string unit) => new(
+        OneLine.Of(row.Name),
+        row.Flagged,
+        row.WeekLoad is null ? null : BriefNumbers.Load(row.WeekLoad),
+        row.UsualWeekLoad is null ? null : BriefNumbers.Load(row.UsualWeekLoad),
+        row.Ratio is null ? null : BriefNumbers.Ratio(row.Ratio),
+        BriefNumbers.Count(row.KnownDays),
+        row.DaysSinceHeavyLegs is null ? null : BriefNumbers.Count(row.DaysSinceHeavyLegs),
+        row.HeavyLegsDays28 is null ? null : BriefNumbers.Count(row.HeavyLegsDays28),
+        row.LastRecorded is null ? null : BriefNumbers.Day(row.LastRecorded),
+        Strip.Of(row, unit),
+        row.Remark is null ? null : OneLine.Sentence(row.Remark));
+}

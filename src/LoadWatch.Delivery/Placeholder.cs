@@ -1,1 +1,0 @@
-namespace LoadWatch.Delivery.Internal; internal static class Placeholder { }

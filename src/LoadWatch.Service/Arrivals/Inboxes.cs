@@ -1,0 +1,56 @@
+using LoadWatch.Service.Configuration;
+using LoadWatch.Service.Pipeline;
+using LoadWatch.Storage;
+using LoadWatch.Storage.Files;
+
+namespace LoadWatch.Service.Arrivals;
+
+/// <summary>Finds the files that a sweep has to look into: all that are new or whose stamp differs from the one they were taken with.</summary>
+public static class Inboxes
+{
+    /// <summary>Changed files in the order of the inboxes and their paths.</summary>
+    public static IReadOnlyList<(FoundFile File, FileStamp Stamp)> Changed(WorkingConfiguration configuration, Store store, SweepReport report)
+    {
+        var changed = new List<(FoundFile, FileStamp)>();
+        foreach (var inbox in configuration.Inboxes)
+        {
+            if (InboxScan.List(inbox) is not { } files)
+            {
+                report.MissingInboxes.Add(inbox.Name);
+                continue;
+            }
+
+            var known = store.Read(session => session.Sightings.Latest(inbox.Name));
+            report.Seen += files.Count;
+            foreach (var file in files)
+            {
+                // No stamp: gone again, or a pipe or link that intake never takes.
+                if (SafeFile.StampOf(file.FullPath) is { } stamp && !(known.TryGetValue(file.Path, out var last) && last.Stamp == stamp))
+                {
+                    changed.Add((file, stamp));
+                }
+            }
+        }
+
+        return changed;
+    }
+
+    /// <summary>Makes one sub-folder per person in every inbox that can be written, so that a new user sees where files go.</summary>
+    public static void MakePersonFolders(WorkingConfiguration configuration)
+    {
+        foreach (var inbox in configuration.Inboxes.Where(inbox => Directory.Exists(inbox.Path)))
+        {
+            try
+            {
+                foreach (var person in configuration.People.Values)
+                {
+                    Directory.CreateDirectory(Path.Combine(inbox.Path, person.Id));
+                }
+            }
+            catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+            {
+                // A read-only share: its owner makes the folders.
+            }
+        }
+    }
+}

@@ -1,0 +1,72 @@
+using System.CommandLine;
+using LoadWatch.Service.Configuration;
+using LoadWatch.Storage;
+using LoadWatch.Storage.Dialects;
+
+namespace LoadWatch.Service.Commands;
+
+/// <summary>The commands of <c>loadwatch</c> and how each kind of failure ends it.</summary>
+public static class CommandLine
+{
+    /// <returns>An exit code of <see cref="ExitCode"/>.</returns>
+    public static async Task<int> RunAsync(string[] args)
+    {
+        var parsed = Root().Parse(args);
+        if (parsed.Errors.Count > 0)
+        {
+            foreach (var error in parsed.Errors)
+            {
+                await Console.Error.WriteLineAsync(error.Message);
+            }
+
+            await Console.Error.WriteLineAsync("See loadwatch --help, or loadwatch COMMAND --help.");
+            return ExitCode.Usage;
+        }
+
+        try
+        {
+            return await parsed.InvokeAsync(new InvocationConfiguration { EnableDefaultExceptionHandler = false });
+        }
+        catch (Exception e) when (Expected(e) is { } code)
+        {
+            await Console.Error.WriteLineAsync(e.Message);
+            return code;
+        }
+        catch (Exception e)
+        {
+            await Console.Error.WriteLineAsync($"A defect of LoadWatch, please report it:{Environment.NewLine}{e}");
+            return ExitCode.Software;
+        }
+    }
+
+    /// <summary>Every command, in the order of a new user's day.</summary>
+    public static RootCommand Root() => new("Takes in wearable recordings overnight and tells staff in the morning who is well above their usual, who has "
+        + "had no heavy or fast work for too long, and whose recordings are missing.")
+    {
+        DemoCommand.Create(),
+        InitCommand.Create(),
+        CheckCommand.Create(),
+        SweepCommand.Create(),
+        RunCommand.Create(),
+        BriefCommand.Create(),
+        PeopleCommand.Create(),
+        AlertsCommand.Create(),
+        ExplainCommand.Create(),
+        InspectCommand.Create(),
+        ExportCommand.Create(),
+        RebuildCommand.Create(),
+        StatusCommand.Create(),
+    };
+
+    private static int? Expected(Exception e) => e switch
+    {
+        ConfigurationException => ExitCode.Configuration,
+        InstanceRunningException => ExitCode.TryLater,
+        DatabaseRefusedException or InvalidDataException => ExitCode.Data,
+        AggregateException { InnerException: { } inner } => Expected(inner),
+        OperationCanceledException => ExitCode.Interrupted,
+        UnauthorizedAccessException => ExitCode.NoPermission,
+        IOException => ExitCode.InputOutput,
+        _ => null,
+    };
+}

@@ -1,0 +1,134 @@
+using System.CommandLine;
+using System.Security.Cryptography;
+using System.Text;
+using System.Text.Json;
+using LoadWatch.Decoding;
+using LoadWatch.Recordings;
+using LoadWatch.Service.Arrivals;
+using LoadWatch.Service.Configuration;
+using LoadWatch.Service.Export;
+using LoadWatch.Storage.Files;
+
+namespace LoadWatch.Service.Commands;
+
+/// <summary><c>loadwatch inspect</c>: what is in files; nothing is taken in.</summary>
+public static class InspectCommand
+{
+    private const long LargestFileBytes = 512L * 1024 * 1024;
+
+    public static Command Create()
+    {
+        var files = new Argument<string[]>("files") { Description = "FIT or CSV files, also in gzip or zip.", Arity = ArgumentArity.ZeroOrMore };
+        var list = new Option<string?>("--from-list") { Description = "Read the file names from a file, one a line; - is standard input.", HelpName = "LIST" };
+        var json = CommonOptions.Json();
+        var config = new Option<string?>("--config", "-c") { Description = "Take CSV layouts from this configuration.", HelpName = "FILE" };
+        var command = new Command("inspect", "Say what is in files; nothing is taken in.") { files, list, json, config };
+        command.SetAction(parsed => Run(
+            Names(parsed.GetValue(files) ?? [], parsed.GetValue(list)), parsed.GetValue(json), parsed.GetValue(config)));
+        return command;
+    }
+
+    private static IEnumerable<string> Names(string[] files, string? list) => list switch
+    {
+        null => files,
+        "-" => files.Concat(Lines(Console.In)),
+        _ => files.Concat(File.ReadLines(list).Where(line => line.Length > 0)),
+    };
+
+    private static IEnumerable<string> Lines(TextReader reader)
+    {
+        while (reader.ReadLine() is { } line)
+        {
+            if (line.Length > 0)
+            {
+                yield return line;
+            }
+        }
+    }
+
+    private static int Run(IEnumerable<string> names, bool json, string? configPath)
+    {
+        var decoders = new DecoderSet(configPath is null ? [Decoding.Csv.BuiltInLayouts.Samples] : ConfigurationReader.Read(configPath).Layouts);
+        var lines = names.AsParallel().AsOrdered().SelectMany(name => Inspect(decoders, name)).AsSequential();
+        using var output = new StreamWriter(Console.OpenStandardOutput(), new UTF8Encoding(false), 1 << 16);
+        if (json)
+        {
+            WriteJson(output, lines);
+        }
+        else
+        {
+            foreach (var line in lines)
+            {
+                WriteText(output, line);
+            }
+        }
+
+        return ExitCode.Ok;
+    }
+
+    private static IEnumerable<InspectLine> Inspect(DecoderSet decoders, string name)
+    {
+        if (SafeFile.Open(name) is not OpenedFile opened)
+        {
+            return [InspectLine.Unreadable(name, ((UnopenedFile)SafeFile.Open(name)).Reason)];
+        }
+
+        using (opened)
+        {
+            if (opened.Stamp.Size > LargestFileBytes)
+            {
+                return [InspectLine.Unreadable(name, $"larger than {LargestFileBytes / (1024 * 1024)} MB")];
+            }
+
+            var bytes = new byte[opened.Stamp.Size];
+            opened.Stream.ReadExactly(bytes);
+            var sha = Convert.ToHexStringLower(SHA256.HashData(bytes));
+            return ArrivalContent.Expand(decoders, sha, name, bytes).SelectMany(content => Of(decoders, content)).ToList();
+        }
+    }
+
+    private static IEnumerable<InspectLine> Of(DecoderSet decoders, ArrivalContent content)
+    {
+        if (content.Kind is ContentKind.Gzip or ContentKind.Zip)
+        {
+            return content.Problems.Count > 0 || content.Members == 0
+                ? [InspectLine.WithoutRecording(content.Path, Words.Of(content.Kind), content.Problems)]
+                : [];
+        }
+
+        var file = decoders.Decode(content.Bytes);
+        return file.Recordings.Count == 0
+            ? [InspectLine.WithoutRecording(content.Path, file.Kind, file.Problems)]
+            : file.Recordings.Select(recording => InspectLine.Of(content.Path, file, recording));
+    }
+
+    private static void WriteJson(StreamWriter output, IEnumerable<InspectLine> lines)
+    {
+        output.Write('[');
+        var separator = "\n";
+        foreach (var line in lines)
+        {
+            output.Write(separator);
+            output.Write(JsonSerializer.Serialize(line, Words.Json));
+            separator = ",\n";
+        }
+
+        output.Write("\n]\n");
+    }
+
+    private static void WriteText(StreamWriter output, InspectLine line)
+    {
+        output.Write(line.Part is { } part
+            ? FormattableString.Invariant($"{line.File}  part {part}  {line.Sport}  {line.FirstSample ?? "no date"}  {line.Samples} samples\n")
+            : $"{line.File}  {line.Kind}: no recording\n");
+        foreach (var (channel, numbers) in line.Channels)
+        {
+            output.Write(FormattableString.Invariant($"    {channel,-10} {numbers.N,7} readings, mean {numbers.Mean:0.##}, highest {numbers.Max:0.##}\n"));
+        }
+
+        foreach (var problem in line.Problems)
+        {
+            output.Write($"    {problem.Severity}: {problem.Text}\n");
+        }
+    }
+}

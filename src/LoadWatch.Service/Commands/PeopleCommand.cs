@@ -1,0 +1,82 @@
+using System.CommandLine;
+using System.Text.Json;
+using LoadWatch.Days;
+using LoadWatch.People;
+using LoadWatch.Service.Export;
+using LoadWatch.Stimulus;
+using Spectre.Console;
+
+namespace LoadWatch.Service.Commands;
+
+/// <summary><c>loadwatch people</c>: who is watched and where each stands.</summary>
+public static class PeopleCommand
+{
+    public static Command Create()
+    {
+        var config = CommonOptions.Config();
+        var json = CommonOptions.Json();
+        var command = new Command("people", "List who is watched, with the last computed day of each.") { config, json };
+        command.SetAction(parsed => Run(parsed.GetValue(config)!, parsed.GetValue(json)));
+        return command;
+    }
+
+    private static int Run(string configPath, bool json)
+    {
+        using var workplace = Workplace.OpenToRead(configPath);
+        var lines = workplace.Store.Read(session => workplace.Configuration.People.Values
+            .OrderBy(person => person.Id, StringComparer.Ordinal)
+            .Select(person => Line(person, LastDay.Of(session, person.Id)))
+            .ToList());
+        if (json)
+        {
+            Console.Out.WriteLine(JsonSerializer.Serialize(lines, Words.Json));
+        }
+        else
+        {
+            Print(lines);
+        }
+
+        return ExitCode.Ok;
+    }
+
+    private static PersonLine Line(Person person, Day? last) => new(
+        person.Id,
+        person.Name,
+        person.Group,
+        last is null ? null : Words.Date(last.Date),
+        last?.DaysSinceRecorded is { } days ? Words.Date(last.Date.PlusDays(-days)) : null,
+        last?.Acute,
+        last?.RatioUncoupled,
+        last?.Coverage28,
+        last is not null && last.Regions.TryGetValue(BodyRegion.Legs, out var legs) ? legs.DaysSince : null);
+
+    private static void Print(List<PersonLine> lines)
+    {
+        var table = new Table().AddColumns("person", "name", "group", "last recording", "week load", "ratio", "coverage", "heavy or fast legs");
+        foreach (var line in lines)
+        {
+            table.AddRow(
+                Markup.Escape(line.Person),
+                Markup.Escape(line.Name),
+                Markup.Escape(line.Group),
+                line.LastRecorded ?? "none yet",
+                line.WeekLoad is { } load ? FormattableString.Invariant($"{load:0}") : "unknown",
+                line.RatioUncoupled is { } ratio ? FormattableString.Invariant($"{ratio:0.00}") : "unknown",
+                line.Coverage28 is { } coverage ? FormattableString.Invariant($"{100 * coverage:0} %") : "unknown",
+                line.DaysSinceHeavyOrFastLegs is { } days ? FormattableString.Invariant($"{days} days ago") : "unknown");
+        }
+
+        AnsiConsole.Write(table);
+    }
+
+    private sealed record PersonLine(
+        string Person,
+        string Name,
+        string Group,
+        string? ComputedTo,
+        string? LastRecorded,
+        double? WeekLoad,
+        double? RatioUncoupled,
+        double? Coverage28,
+        int? DaysSinceHeavyOrFastLegs);
+}

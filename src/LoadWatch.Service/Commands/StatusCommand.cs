@@ -1,0 +1,57 @@
+using System.CommandLine;
+using System.Text.Json;
+using LoadWatch.Recordings;
+using LoadWatch.Service.Export;
+using LoadWatch.Service.Health;
+using LoadWatch.Storage;
+
+namespace LoadWatch.Service.Commands;
+
+/// <summary><c>loadwatch status</c>: whether the service does its work.</summary>
+public static class StatusCommand
+{
+    public static Command Create()
+    {
+        var config = CommonOptions.Config();
+        var json = CommonOptions.Json();
+        var command = new Command("status", "Say when the last sweep was and what waits for somebody.") { config, json };
+        command.SetAction(parsed => Run(parsed.GetValue(config)!, parsed.GetValue(json)));
+        return command;
+    }
+
+    private static int Run(string configPath, bool json)
+    {
+        using var workplace = Workplace.OpenToRead(configPath);
+        var summary = workplace.Store.Read(session => Summary(workplace, session));
+        Console.Out.WriteLine(json ? JsonSerializer.Serialize(summary, Words.Json) : Text(summary));
+        return ExitCode.Ok;
+    }
+
+    private static StatusSummary Summary(Workplace workplace, StoreSession session)
+    {
+        var counts = session.Arrivals.CountByState();
+        return new StatusSummary(
+            typeof(StatusCommand).Assembly.GetName().Version!.ToString(3),
+            StatusFile.Read(workplace.Folder.Root),
+            Enum.GetValues<ArrivalState>().ToDictionary(state => Words.Of(state), state => counts.GetValueOrDefault(state), StringComparer.Ordinal),
+            session.Notices.PendingDeliveries().Count,
+            workplace.Configuration.People.Count);
+    }
+
+    private static string Text(StatusSummary summary)
+    {
+        var arrivals = string.Join(", ", summary.Arrivals.Select(pair => $"{pair.Value} {pair.Key}"));
+        var sweep = summary.Service is { } service
+            ? $"Last sweep of the service: {service.LastSweep}{(service.Done ? "" : $", failed: {service.Failure}")}"
+            : "The service has not run here yet (loadwatch run).";
+        var faults = summary.Service is { } known
+            ? new[] { known.ConfigurationFault }.OfType<string>().Concat(known.MissingInboxes.Select(name => $"The inbox \"{name}\" cannot be listed."))
+            : [];
+        return string.Join(
+            Environment.NewLine,
+            [$"LoadWatch {summary.Version}", sweep, $"Arrivals: {arrivals}", $"People: {summary.People}; deliveries waiting: {summary.DeliveriesWaiting}", .. faults]);
+    }
+
+    private sealed record StatusSummary(
+        string Version, StatusLine? Service, IReadOnlyDictionary<string, int> Arrivals, int DeliveriesWaiting, int People);
+}

@@ -1,0 +1,52 @@
+using System.CommandLine;
+using LoadWatch.Recordings;
+using LoadWatch.Service.Pipeline;
+using NodaTime;
+
+namespace LoadWatch.Service.Commands;
+
+/// <summary><c>loadwatch sweep</c>: take in, evaluate, deliver what is due, exit.</summary>
+public static class SweepCommand
+{
+    public static Command Create()
+    {
+        var config = CommonOptions.Config();
+        var asOf = CommonOptions.Moment("--as-of", "Judge as of this moment instead of now, for rehearsals.");
+        var command = new Command("sweep", "Take in what is in the inboxes, evaluate, deliver what is due, and exit.") { config, asOf };
+        command.SetAction((parsed, cancel) => Task.FromResult(Run(parsed.GetValue(config)!, parsed.GetValue(asOf) ?? MachineClock.Now(), cancel)));
+        return command;
+    }
+
+    private static int Run(string configPath, Instant now, CancellationToken cancel)
+    {
+        using var workplace = Workplace.OpenToWork(configPath);
+        Print(workplace.NewSweep(now).Run(cancel));
+        return ExitCode.Ok;
+    }
+
+    public static void Print(SweepReport report)
+    {
+        Console.Out.WriteLine(Counts(report));
+        foreach (var line in report.MissingInboxes.Select(name => $"The inbox \"{name}\" cannot be listed.")
+            .Concat(report.Unreadable.Select(line => $"Left alone: {line}"))
+            .Concat(report.Undelivered.Select(line => $"Not delivered yet: {line}")))
+        {
+            Console.Error.WriteLine(line);
+        }
+
+        foreach (var page in report.Pages)
+        {
+            Console.Out.WriteLine($"Page: {page}");
+        }
+    }
+
+    /// <summary>One line that counts each state.</summary>
+    public static string Counts(SweepReport report)
+    {
+        var states = Enum.GetValues<ArrivalState>()
+            .Where(state => state != ArrivalState.Waiting)
+            .Select(state => $"{report.CountOf(state)} {state.ToString().ToLowerInvariant()}");
+        return $"{report.Seen} files seen: {string.Join(", ", states)}, {report.Settling} still settling; "
+            + $"{report.AlertChanges} alert changes, {report.NoticesDecided} briefs decided.";
+    }
+}

@@ -1,0 +1,64 @@
+using LoadWatch.Service.Configuration;
+using LoadWatch.Service.Pipeline;
+using LoadWatch.Storage;
+using NodaTime;
+
+namespace LoadWatch.Service.Commands;
+
+/// <summary>The configuration with its opened store. With the lock it may take in and evaluate, without it only read.</summary>
+public sealed class Workplace : IDisposable
+{
+    private readonly InstanceLock? instance;
+
+    private Workplace(WorkingConfiguration configuration, DataFolder folder, InstanceLock? instance, Store store)
+    {
+        Configuration = configuration;
+        Folder = folder;
+        this.instance = instance;
+        Store = store;
+    }
+
+    /// <summary>The last good configuration.</summary>
+    public WorkingConfiguration Configuration { get; private set; }
+
+    public DataFolder Folder { get; }
+
+    public Store Store { get; }
+
+    /// <exception cref="ConfigurationException">The configuration is wrong.</exception>
+    /// <exception cref="InstanceRunningException">Another process takes in files of the same data folder.</exception>
+    public static Workplace OpenToWork(string configPath)
+    {
+        var configuration = ConfigurationReader.Read(configPath);
+        var folder = DataFolder.Open(configuration.DataFolder);
+        var taken = InstanceLock.Take(folder);
+        try
+        {
+            return new Workplace(configuration, folder, taken, Store.Open(folder));
+        }
+        catch
+        {
+            taken.Dispose();
+            throw;
+        }
+    }
+
+    /// <inheritdoc cref="OpenToWork"/>
+    public static Workplace OpenToRead(string configPath)
+    {
+        var configuration = ConfigurationReader.Read(configPath);
+        var folder = DataFolder.Open(configuration.DataFolder);
+        return new Workplace(configuration, folder, null, Store.Open(folder));
+    }
+
+    /// <summary>Takes over a new configuration; its data folder stays the one that is open.</summary>
+    public WorkingConfiguration Adopt(WorkingConfiguration configuration) => Configuration = configuration;
+
+    public Sweep NewSweep(Instant now) => new(Configuration, Folder, Store, now, new ChildProcessProbe());
+
+    public void Dispose()
+    {
+        Store.Dispose();
+        instance?.Dispose();
+    }
+}

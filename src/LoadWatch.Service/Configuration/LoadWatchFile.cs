@@ -1,0 +1,166 @@
+using System.ComponentModel.DataAnnotations;
+using System.Text.Json.Serialization;
+using LoadWatch.Decoding.Csv;
+using LoadWatch.Findings;
+using LoadWatch.People;
+using NodaTime;
+
+namespace LoadWatch.Service.Configuration;
+
+/// <summary>The file <c>loadwatch.json</c>. Paths are relative to the file; every key has its default here and in <c>config/loadwatch.json</c>.</summary>
+public sealed record LoadWatchFile
+{
+    /// <summary>Address of the JSON schema, for editors only.</summary>
+    [JsonPropertyName("$schema")]
+    public string? Schema { get; init; }
+
+    /// <summary>Folder of the archive and the database.</summary>
+    public string Data { get; init; } = "data";
+
+    /// <summary>Folder of the pages, one file per contact.</summary>
+    public string Pages { get; init; } = "pages";
+
+    /// <summary>Folder of the notice files, one per month.</summary>
+    public string Notices { get; init; } = "notices";
+
+    /// <summary>Who is watched: a CSV with the columns person, name, group, birth_year, sex, time_zone.</summary>
+    public string Roster { get; init; } = "roster.csv";
+
+    /// <summary>Personal reference values: a CSV with the columns person, date, anchor, value, unit, source, exercise.</summary>
+    public string Anchors { get; init; } = "anchors.csv";
+
+    /// <summary>IANA zone of people and contacts that name none; blank takes the zone of this machine.</summary>
+    public string TimeZone { get; init; } = "";
+
+    /// <summary>Watched folders.</summary>
+    public IReadOnlyList<InboxEntry> Inboxes { get; init; } = [new InboxEntry()];
+
+    /// <summary>Squads and classes.</summary>
+    public IReadOnlyList<GroupEntry> Groups { get; init; } = [new GroupEntry()];
+
+    /// <summary>Who is told.</summary>
+    public IReadOnlyList<ContactEntry> Contacts { get; init; } = [new ContactEntry()];
+
+    /// <summary>CSV layouts beside the built-in one; the header picks the layout.</summary>
+    public IReadOnlyList<CsvLayout> Layouts { get; init; } = [];
+
+    /// <summary>Zones, body regions, and how much of a recording must be usable.</summary>
+    public ComputationEntry Computation { get; init; } = new();
+
+    /// <summary>Limits of the rules for every group that sets none of its own.</summary>
+    public RuleLimits Limits { get; init; } = new();
+
+    /// <summary>How the service looks for files.</summary>
+    public IntakeEntry Intake { get; init; } = new();
+}
+
+/// <summary>One watched folder.</summary>
+public sealed record InboxEntry
+{
+    /// <summary>Short name, used in listings.</summary>
+    [Required(AllowEmptyStrings = false)]
+    public string Name { get; init; } = "inbox";
+
+    /// <summary>The folder. A sub-folder named after a person holds that person's recordings.</summary>
+    [Required(AllowEmptyStrings = false)]
+    public string Path { get; init; } = "inbox";
+
+    /// <summary>Whether files stay (<c>leave</c>) or go once their effects are durable (<c>move</c>).</summary>
+    public TakeMode Take { get; init; } = TakeMode.Leave;
+}
+
+public enum TakeMode
+{
+    Leave,
+    Move,
+}
+
+/// <summary>One squad or class.</summary>
+public sealed record GroupEntry
+{
+    /// <summary>Short name, used in the roster.</summary>
+    [Required(AllowEmptyStrings = false)]
+    public string Id { get; init; } = "squad";
+
+    /// <summary>The name that briefs show; blank shows the id.</summary>
+    public string Name { get; init; } = "";
+
+    /// <summary>Name of the quantity that is this group's load.</summary>
+    public string LoadQuantity { get; init; } = "banister_trimp";
+
+    /// <summary>Limits that differ from the common ones; only the keys that differ.</summary>
+    public RuleLimits? Limits { get; init; }
+}
+
+/// <summary>One reader of briefs.</summary>
+public sealed record ContactEntry
+{
+    /// <summary>Short name; names the page.</summary>
+    [Required(AllowEmptyStrings = false)]
+    [RegularExpression("^[A-Za-z0-9_-]{1,40}$", ErrorMessage = "may hold letters, digits, - and _ only, 40 at most")]
+    public string Id { get; init; } = "staff";
+
+    /// <summary>The name that the brief shows; blank shows the id.</summary>
+    public string Name { get; init; } = "";
+
+    public ContactRole Role { get; init; } = ContactRole.Coach;
+
+    /// <summary>Ids of groups; blank for all of them.</summary>
+    public IReadOnlyList<string> Groups { get; init; } = [];
+
+    /// <summary>Ids of single people, instead of groups.</summary>
+    public IReadOnlyList<string> People { get; init; } = [];
+
+    /// <summary>Local time of the brief.</summary>
+    [RegularExpression("^([01][0-9]|2[0-3]):[0-5][0-9]$", ErrorMessage = "is a time of day such as 06:30")]
+    public string BriefAt { get; init; } = "06:30";
+
+    /// <summary>Weekdays of the brief.</summary>
+    public IReadOnlyList<IsoDayOfWeek> BriefDays { get; init; } =
+    [
+        IsoDayOfWeek.Monday, IsoDayOfWeek.Tuesday, IsoDayOfWeek.Wednesday, IsoDayOfWeek.Thursday,
+        IsoDayOfWeek.Friday, IsoDayOfWeek.Saturday, IsoDayOfWeek.Sunday,
+    ];
+
+    /// <summary>IANA zone; blank takes the common one.</summary>
+    public string TimeZone { get; init; } = "";
+}
+
+/// <summary>What may be set of the computation.</summary>
+public sealed record ComputationEntry
+{
+    /// <summary>Share of the sampled time with a usable reading below which a channel gives no load and no stimulus. 0 to 1.</summary>
+    [Range(0.0, 1.0)]
+    public double UsableShareWanted { get; init; } = 0.5;
+
+    /// <summary>Inner bounds of the heart-rate zones, fractions of heart-rate reserve, where thresholds are not anchored.</summary>
+    public IReadOnlyList<double> HeartRateReserveBounds { get; init; } = [0.30, 0.40, 0.60, 0.90];
+
+    /// <summary>Inner bounds of the power zones, fractions of critical power.</summary>
+    public IReadOnlyList<double> PowerBounds { get; init; } = [0.65, 0.85, 1.00, 1.15];
+
+    /// <summary>Inner bounds of the speed zones, m/s.</summary>
+    public IReadOnlyList<double> SpeedBounds { get; init; } = [2, 4, 5.5, 7];
+
+    /// <summary>Body regions by exercise, added to the shipped table or replacing its entries: legs, trunk, arms.</summary>
+    public IReadOnlyDictionary<string, IReadOnlyList<string>> Exercises { get; init; } = new Dictionary<string, IReadOnlyList<string>>();
+
+    /// <summary>Body regions by sport, added to the shipped table or replacing its entries: legs, trunk, arms.</summary>
+    public IReadOnlyDictionary<string, IReadOnlyList<string>> Sports { get; init; } = new Dictionary<string, IReadOnlyList<string>>();
+}
+
+/// <summary>How files are looked for.</summary>
+public sealed record IntakeEntry
+{
+    /// <summary>Seconds between two looks at the inboxes.</summary>
+    [Range(5, 3600)]
+    public int ScanSeconds { get; init; } = 60;
+
+    /// <summary>Seconds for which a file that does not show by its content that it is whole must stand still.</summary>
+    [Range(0, 86400)]
+    public int SettleSeconds { get; init; } = 60;
+
+    /// <summary>Largest file taken, megabytes.</summary>
+    [Range(1, 512)]
+    public int LargestFileMegabytes { get; init; } = 32;
+}

@@ -1,0 +1,43 @@
+using LoadWatch.Activities;
+using LoadWatch.Decoding.Csv;
+using LoadWatch.People;
+using NodaTime;
+
+namespace LoadWatch.Service.Configuration;
+
+/// <summary>The configuration as the service works with it: checked, paths resolved, one snapshot for a whole sweep.</summary>
+/// <param name="Folder">Absolute folder of <c>loadwatch.json</c>.</param>
+/// <param name="Hash">SHA-256 over the three files, 64 hex digits.</param>
+/// <param name="Text">The three files, one after the other, as kept in <c>config_version</c>.</param>
+/// <param name="People">By id, compared without regard to case, in roster order.</param>
+/// <param name="Groups">By id.</param>
+public sealed record WorkingConfiguration(
+    string Folder,
+    string Hash,
+    string Text,
+    string DataFolder,
+    string PagesFolder,
+    string NoticesFolder,
+    IReadOnlyDictionary<string, Person> People,
+    IReadOnlyDictionary<string, Group> Groups,
+    IReadOnlyList<Contact> Contacts,
+    AnchorBook Anchors,
+    IReadOnlyList<Inbox> Inboxes,
+    IReadOnlyList<CsvLayout> Layouts,
+    ComputationSettings Computation,
+    Duration ScanEvery,
+    Duration Settle,
+    long LargestFileBytes)
+{
+    /// <summary>The people whom a contact's brief is about, sorted by id.</summary>
+    public IEnumerable<Person> PeopleOf(Contact contact) =>
+        People.Values
+            .Where(person => contact.People.Count > 0
+                ? contact.People.Contains(person.Id, StringComparer.OrdinalIgnoreCase)
+                : contact.Groups.Contains(person.Group))
+            .OrderBy(person => person.Id, StringComparer.Ordinal);
+}
+
+/// <summary>A watched folder.</summary>
+/// <param name="Path">Absolute.</param>
+public sealed record Inbox(string Name, string Path, TakeMode Take);

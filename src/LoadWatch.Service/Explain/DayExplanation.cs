@@ -1,0 +1,103 @@
+using System.Globalization;
+using System.Text;
+using LoadWatch.Days;
+using LoadWatch.Service.Configuration;
+using LoadWatch.Service.Export;
+using LoadWatch.Stimulus;
+using LoadWatch.Storage;
+using LoadWatch.Storage.Activities;
+using NodaTime;
+
+namespace LoadWatch.Service.Explain;
+
+/// <summary>A person's day: state, sessions, trends with their coverage, findings.</summary>
+public static class DayExplanation
+{
+    /// <summary>Null where the word is nobody's id.</summary>
+    public static string? Of(WorkingConfiguration configuration, StoreSession session, string person, LocalDate? date)
+    {
+        if (!configuration.People.TryGetValue(person, out var known))
+        {
+            return null;
+        }
+
+        var day = date is { } wanted ? session.Days.OfPerson(known.Id, wanted, wanted).FirstOrDefault() : LastDay.Of(session, known.Id);
+        if (day is null)
+        {
+            return $"{known.Name}: nothing is computed for {(date is { } missing ? Words.Date(missing) : "any day yet")}.";
+        }
+
+        var text = new StringBuilder();
+        text.AppendLine(CultureInfo.InvariantCulture, $"{known.Name}, {Words.Date(day.Date)}: {Words.Of(day.State)}{(day.StateSource is { } source ? $" ({source})" : "")}");
+        AppendTrends(text, day, configuration.Groups[known.Group].LoadQuantity);
+        foreach (var activity in session.Activities.OfPerson(known.Id, day.Date, day.Date))
+        {
+            AppendActivity(text, activity);
+        }
+
+        foreach (var finding in session.Findings.OfPerson(known.Id, day.Date, day.Date))
+        {
+            text.AppendLine();
+            text.AppendLine(CultureInfo.InvariantCulture, $"finding {finding.Rule}: {finding.Text}");
+            AlertExplanation.Append(text, finding.Evidence);
+        }
+
+        return text.ToString();
+    }
+
+    private static void AppendTrends(StringBuilder text, Day day, string quantity)
+    {
+        Line(text, $"load ({quantity})", day.Load);
+        Line(text, "acute: sum of 7 days, scaled to the covered ones", day.Acute);
+        Line(text, "chronic: mean week of 28 days, scaled to the covered ones", day.Chronic);
+        Line(text, "mean week of days 8 to 28 back", day.ChronicBefore);
+        Line(text, "ratio, coupled = acute / chronic", day.RatioCoupled);
+        Line(text, "ratio, uncoupled = acute / mean week of days 8 to 28 back", day.RatioUncoupled);
+        Line(text, "ratio of exponential averages, 7 and 28 days (Williams 2017)", day.RatioEwma);
+        Line(text, "change against the week before, fraction", day.WeeklyChange);
+        Line(text, "monotony = mean / SD (n - 1) of 7 days (Foster 1998)", day.Monotony);
+        Line(text, "strain = week x monotony (Foster 1998)", day.Strain);
+        Line(text, "share of 7 days with known load", day.Coverage7);
+        Line(text, "share of 28 days with known load", day.Coverage28);
+        foreach (var (region, state) in day.Regions.OrderBy(pair => pair.Key))
+        {
+            var heavy = state.HeavyOrFast switch { true => "yes", false => "no", null => "unknown" };
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {BodyRegions.Word(region)}: heavy or fast {heavy}, days since {Number(state.DaysSince)}, in 28 days {Number(state.Days28)}, usual gap {Number(state.UsualGapDays)} days");
+        }
+    }
+
+    private static void AppendActivity(StringBuilder text, StoredActivity activity)
+    {
+        text.AppendLine();
+        text.AppendLine(CultureInfo.InvariantCulture, $"session {Words.Start(activity.Winner.Start.WithOffset(activity.Winner.LocalOffset))} {activity.Winner.Sport}, by {activity.Winner.Source}");
+        foreach (var quantity in activity.Values.Quantities)
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {quantity.Name} = {quantity.Value:0.###} {quantity.Unit}{(quantity.Estimated ? " (estimated)" : "")}");
+        }
+
+        foreach (var stimulus in activity.Values.Stimulus)
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {BodyRegions.Word(stimulus.Region)} from {stimulus.Channel}, grade {stimulus.Grade}: hard bouts {OfBand(stimulus.HardBouts)}, hard repetitions {OfBand(stimulus.HardRepetitions)}, seconds of the slow class {OfBand(stimulus.SlowSeconds)}, medium {OfBand(stimulus.MediumSeconds)}, largest {OfBand(stimulus.LargeSeconds)}");
+            foreach (var missing in stimulus.NotSeen)
+            {
+                text.AppendLine(CultureInfo.InvariantCulture, $"        not seen: {missing}");
+            }
+        }
+
+        foreach (var remark in activity.Values.Remarks)
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {remark}");
+        }
+
+        text.AppendLine(CultureInfo.InvariantCulture, $"    recordings: {string.Join(", ", activity.RecordingKeys.Select(key => key[..12] + key[64..]))}");
+    }
+
+    private static void Line(StringBuilder text, string name, double? value) =>
+        text.AppendLine(CultureInfo.InvariantCulture, $"    {name} = {Number(value)}");
+
+    private static string Number(double? value) => value is { } known ? known.ToString("0.###", CultureInfo.InvariantCulture) : "unknown";
+
+    private static string OfBand(Band? band) => band is { } known
+        ? string.Create(CultureInfo.InvariantCulture, $"{known.Mid:0.#} ({known.Low:0.#} to {known.High:0.#})")
+        : "unknown";
+}

@@ -1,0 +1,72 @@
+using System.Text.Json.Serialization;
+
+namespace LoadWatch.Service.Export;
+
+// The rows of the export contract (config/README.md). Names carry units; unknown is null; nothing in them depends on the clock or on the order of arrival.
+
+public sealed record ArrivalLine([property: JsonPropertyName("sha256")] string Sha256, string File, string? Kind, string State, string? Reason, string? Person);
+
+public sealed record RecordingLine([property: JsonPropertyName("sha256")] string Sha256, string File, int Part);
+
+public sealed record QuantityLine(string Name, double Value, string Unit, bool Estimated);
+
+public sealed record ZonesLine(string Basis, IReadOnlyList<double> Bounds, string Unit, bool Estimated);
+
+public sealed record TimeInZoneLine(
+    IReadOnlyList<double>? HeartRate, IReadOnlyList<double>? Power, IReadOnlyList<double>? Speed, IReadOnlyDictionary<string, ZonesLine> Zones);
+
+public sealed record BandLine(double Low, double Mid, double High);
+
+public sealed record StimulusLine(
+    string Region,
+    BandLine? HardBouts,
+    BandLine? HardRepetitions,
+    BandLine? SlowS,
+    BandLine? MediumS,
+    BandLine? LargeS,
+    string Grade,
+    string Channel,
+    IReadOnlyList<string> NotSeen);
+
+public sealed record ActivityLine(
+    string Person,
+    string Start,
+    string Sport,
+    double? ElapsedS,
+    double? TimerS,
+    IReadOnlyList<QuantityLine> Quantities,
+    string LoadQuantity,
+    TimeInZoneLine TimeInZoneS,
+    double? HeartRateMeanBpm,
+    int? HeartRateMaxBpm,
+    double? PowerMeanW,
+    double? PowerMaxW,
+    IReadOnlyDictionary<string, double> UsableShare,
+    IReadOnlyList<StimulusLine> Stimulus,
+    IReadOnlyList<RecordingLine> Recordings,
+    IReadOnlyList<string> Remarks);
+
+public sealed record DayLine(
+    string Person,
+    string Date,
+    string State,
+    string? StateSource,
+    double? Load,
+    double? Acute,
+    double? Chronic,
+    double? RatioCoupled,
+    double? RatioUncoupled,
+    double? RatioEwma,
+    double? WeeklyChange,
+    double? Monotony,
+    double? Strain,
+    [property: JsonPropertyName("coverage_7")] double Coverage7,
+    [property: JsonPropertyName("coverage_28")] double Coverage28,
+    [property: JsonPropertyName("heavy_or_fast_7")] IReadOnlyDictionary<string, int?> HeavyOrFast7,
+    [property: JsonPropertyName("heavy_or_fast_28")] IReadOnlyDictionary<string, int?> HeavyOrFast28,
+    IReadOnlyDictionary<string, int?> DaysSinceHeavyOrFast);
+
+public sealed record FindingLine(string Person, string Rule, string? Region, string Date, string Severity, double Value, double Limit, string Unit);
+
+public sealed record AlertLine(
+    string Id, string Person, string Rule, string? Region, string Raised, string State, string Severity, string Text);

@@ -1,0 +1,151 @@
+using System.Text.Json;
+using LoadWatch.Alerts;
+using LoadWatch.Days;
+using LoadWatch.Findings;
+using LoadWatch.Loads;
+using LoadWatch.Recordings;
+using LoadWatch.Service.Configuration;
+using LoadWatch.Stimulus;
+using LoadWatch.Storage;
+using LoadWatch.Storage.Activities;
+using NodaTime;
+
+namespace LoadWatch.Service.Export;
+
+/// <summary>Writes what is stored as JSON Lines, sorted so that equal stores give equal text.</summary>
+/// <param name="person">Id of one person, or null for all.</param>
+/// <param name="from">First date, or null; arrivals have no date and are never cut by it.</param>
+/// <param name="to">Last date, or null.</param>
+public sealed class Exporter(WorkingConfiguration configuration, StoreSession session, string? person, LocalDate? from, LocalDate? to)
+{
+    /// <summary>What can be exported.</summary>
+    public static IReadOnlyList<string> Tables { get; } = ["arrivals", "activities", "days", "findings", "alerts"];
+
+    public void Write(string table, TextWriter output)
+    {
+        foreach (var line in Lines(table))
+        {
+            output.Write(JsonSerializer.Serialize(line, line.GetType(), Words.Json));
+            output.Write('\n');
+        }
+    }
+
+    private IEnumerable<object> Lines(string table) => table switch
+    {
+        "arrivals" => session.Arrivals.All().Where(arrival => person is null || arrival.Person == person).Select(arrival => new ArrivalLine(
+            arrival.Sha, FileOf(arrival.Sha), arrival.Kind, Words.Of(arrival.State), arrival.Reason, arrival.Person)),
+        "activities" => ByPerson(id => session.Activities.OfPerson(id, from, to)).Select(Activity),
+        "days" => ByPerson(id => session.Days.OfPerson(id, from, to)).Select(OfDay),
+        "findings" => ByPerson(id => session.Findings.OfPerson(id, from, to)).Select(OfFinding),
+        "alerts" => ByPerson(id => session.Alerts.All(id)).Where(alert => InRange(alert.Raised)).Select(OfAlert),
+        _ => throw new ArgumentOutOfRangeException(nameof(table)),
+    };
+
+    private IEnumerable<T> ByPerson<T>(Func<string, IEnumerable<T>> read) =>
+        configuration.People.Values.Select(known => known.Id)
+            .Where(id => person is null || id == person)
+            .Order(StringComparer.Ordinal)
+            .SelectMany(read);
+
+    private bool InRange(LocalDate date) => (from is null || date >= from) && (to is null || date <= to);
+
+    private string FileOf(string sha) => session.Sightings.Of(sha) is [var first, ..] ? first.Path : "";
+
+    private ActivityLine Activity(StoredActivity activity)
+    {
+        var values = activity.Values;
+        return new ActivityLine(
+            activity.Winner.Person,
+            Words.Start(activity.Winner.Start.WithOffset(activity.Winner.LocalOffset)),
+            activity.Winner.Sport.ToString(),
+            activity.Winner.ElapsedSeconds,
+            activity.Winner.TimerSeconds,
+            values.Quantities.Select(quantity => new QuantityLine(quantity.Name, quantity.Value, quantity.Unit, quantity.Estimated)).ToList(),
+            configuration.Groups[configuration.People[activity.Winner.Person].Group].LoadQuantity,
+            TimesInZone(values.TimesInZone),
+            values.HeartRateMeanBpm,
+            values.HeartRateMaxBpm,
+            values.PowerMeanWatts,
+            values.PowerMaxWatts,
+            values.UsableShare.OrderBy(pair => pair.Key).ToDictionary(pair => Words.Channel(pair.Key), pair => pair.Value, StringComparer.Ordinal),
+            values.Stimulus.Select(OfStimulus).ToList(),
+            activity.RecordingKeys.Select(OfRecording).ToList(),
+            values.Remarks);
+    }
+
+    private RecordingLine OfRecording(string key)
+    {
+        var slash = key.IndexOf('/', StringComparison.Ordinal);
+        return new RecordingLine(key[..slash], FileOf(key[..slash]), int.Parse(key[(slash + 1)..], System.Globalization.CultureInfo.InvariantCulture));
+    }
+
+    private static TimeInZoneLine TimesInZone(IReadOnlyList<TimeInZone> times)
+    {
+        IReadOnlyList<double>? Seconds(Channel channel) => times.FirstOrDefault(zone => zone.Channel == channel)?.Seconds;
+        return new TimeInZoneLine(
+            Seconds(Channel.HeartRate),
+            Seconds(Channel.Power),
+            Seconds(Channel.Speed),
+            times.OrderBy(zone => zone.Channel).ToDictionary(
+                zone => Words.Channel(zone.Channel),
+                zone => new ZonesLine(zone.Basis, zone.Bounds, Words.Unit(zone.Channel), zone.Estimated),
+                StringComparer.Ordinal));
+    }
+
+    private static StimulusLine OfStimulus(RegionStimulus stimulus) => new(
+        BodyRegions.Word(stimulus.Region),
+        OfBand(stimulus.HardBouts),
+        OfBand(stimulus.HardRepetitions),
+        OfBand(stimulus.SlowSeconds),
+        OfBand(stimulus.MediumSeconds),
+        OfBand(stimulus.LargeSeconds),
+        stimulus.Grade.ToString(),
+        stimulus.Channel,
+        stimulus.NotSeen);
+
+    private static BandLine? OfBand(Band? band) => band is { } known ? new BandLine(known.Low, known.Mid, known.High) : null;
+
+    private static DayLine OfDay(Day day) => new(
+        day.Person,
+        Words.Date(day.Date),
+        Words.Of(day.State),
+        day.StateSource,
+        day.Load,
+        day.Acute,
+        day.Chronic,
+        day.RatioCoupled,
+        day.RatioUncoupled,
+        day.RatioEwma,
+        day.WeeklyChange,
+        day.Monotony,
+        day.Strain,
+        day.Coverage7,
+        day.Coverage28,
+        ByRegion(day, region => region.Days7),
+        ByRegion(day, region => region.Days28),
+        ByRegion(day, region => region.DaysSince));
+
+    private static Dictionary<string, int?> ByRegion(Day day, Func<RegionDay, int?> value) =>
+        BodyRegions.All.ToDictionary(
+            BodyRegions.Word, region => day.Regions.TryGetValue(region, out var known) ? value(known) : null, StringComparer.Ordinal);
+
+    private static FindingLine OfFinding(Finding finding) => new(
+        finding.Person,
+        finding.Rule,
+        finding.Region is { } region ? BodyRegions.Word(region) : null,
+        Words.Date(finding.Date),
+        Words.Of(finding.Severity),
+        finding.Value,
+        finding.Limit,
+        finding.Unit);
+
+    private static AlertLine OfAlert(Alert alert) => new(
+        alert.Id,
+        alert.Key.Person,
+        alert.Key.Rule,
+        alert.Key.Region is { } region ? BodyRegions.Word(region) : null,
+        Words.Date(alert.Raised),
+        Words.Of(alert.State),
+        Words.Of(alert.Severity),
+        alert.Text);
+}

@@ -1,0 +1,71 @@
+using System.Text.Json.Serialization;
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Service.Export;
+
+/// <summary>One recording of a file, or a file that holds none, as <c>inspect --json</c> writes it: raw, before any quality cut.</summary>
+/// <param name="FirstSample">Smallest sample time, UTC.</param>
+/// <param name="LastSample">Largest sample time, UTC.</param>
+/// <param name="Samples">Record messages, or rows.</param>
+/// <param name="DistanceM">Largest distance reading.</param>
+/// <param name="Channels">Unweighted numbers over valid readings.</param>
+/// <param name="Problems">Of the whole file.</param>
+public sealed record InspectLine(
+    string File,
+    string Kind,
+    int? Part,
+    string? Sport,
+    string? FirstSample,
+    string? LastSample,
+    int Samples,
+    double? ElapsedS,
+    double? TimerS,
+    double? DistanceM,
+    IReadOnlyDictionary<string, ChannelLine> Channels,
+    int Laps,
+    int Sets,
+    int Lengths,
+    DeviceLine? Device,
+    IReadOnlyList<ProblemLine> Problems)
+{
+    public static InspectLine Of(string path, DecodedFile file, Recording recording) => new(
+        path,
+        file.Kind,
+        recording.Part,
+        recording.Sport.ToString(),
+        Words.Utc(recording.Samples.First),
+        Words.Utc(recording.Samples.Last),
+        recording.Samples.Count,
+        recording.ElapsedSeconds,
+        recording.TimerSeconds,
+        ChannelStatistics.Of(recording.Samples, Channel.Distance).Max,
+        recording.Samples.Channels.ToDictionary(Words.Channel, channel => ChannelLine.Of(recording.Samples, channel), StringComparer.Ordinal),
+        recording.Laps,
+        recording.Sets.Count,
+        recording.Lengths,
+        new DeviceLine(recording.Device.Manufacturer, recording.Device.Product, recording.Device.Serial),
+        file.Problems.Select(ProblemLine.Of).ToList());
+
+    public static InspectLine WithoutRecording(string path, string kind, IReadOnlyList<Problem> problems) => new(
+        path, kind, null, null, null, null, 0, null, null, null, new Dictionary<string, ChannelLine>(), 0, 0, 0, null, problems.Select(ProblemLine.Of).ToList());
+
+    public static InspectLine Unreadable(string path, string reason) =>
+        WithoutRecording(path, "unknown", [new Problem(ProblemSeverity.Error, reason)]);
+}
+
+public sealed record ChannelLine(int N, double? Mean, double? Max)
+{
+    public static ChannelLine Of(SampleSeries samples, Channel channel)
+    {
+        var (count, mean, max) = ChannelStatistics.Of(samples, channel);
+        return new ChannelLine(count, mean, max);
+    }
+}
+
+public sealed record DeviceLine(int? Manufacturer, int? Product, long? Serial);
+
+public sealed record ProblemLine(string Severity, string Reason, long? ByteOffset, long? Line, int? Column, string? Field, [property: JsonIgnore] string Text)
+{
+    public static ProblemLine Of(Problem problem) => new(
+        Words.Of(problem.Severity), problem.Reason, problem.ByteOffset, problem.Line, problem.Column, problem.Field, problem.ToString());
+}

@@ -1,0 +1,41 @@
+using System.Text.Encodings.Web;
+using System.Text.Json;
+using LoadWatch.Recordings;
+using NodaTime;
+using NodaTime.Text;
+
+namespace LoadWatch.Service.Export;
+
+/// <summary>How values are written in exports and other JSON for programs.</summary>
+public static class Words
+{
+    public static JsonSerializerOptions Json { get; } = new()
+    {
+        PropertyNamingPolicy = JsonNamingPolicy.SnakeCaseLower,
+        Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping,
+    };
+
+    /// <summary>ISO 8601 with offset.</summary>
+    public static string Start(OffsetDateTime start) => OffsetDateTimePattern.Rfc3339.Format(start);
+
+    /// <summary>ISO 8601 in UTC.</summary>
+    public static string? Utc(Instant? instant) => instant is { } known ? InstantPattern.ExtendedIso.Format(known) : null;
+
+    public static string Date(LocalDate date) => LocalDatePattern.Iso.Format(date);
+
+    public static string Channel(Channel channel) => JsonNamingPolicy.SnakeCaseLower.ConvertName(channel.ToString());
+
+    /// <summary>An enumeration value in lower case with underscores.</summary>
+    public static string Of<T>(T value)
+        where T : struct, Enum =>
+        JsonNamingPolicy.SnakeCaseLower.ConvertName(value.ToString());
+
+    public static string Unit(Channel channel) => channel switch
+    {
+        Recordings.Channel.HeartRate => "bpm",
+        Recordings.Channel.Power => "W",
+        Recordings.Channel.Speed => "m/s",
+        Recordings.Channel.Cadence => "rpm",
+        _ => "m",
+    };
+}

@@ -1,0 +1,62 @@
+using LoadWatch.Activities;
+using LoadWatch.Decoding;
+using LoadWatch.Recordings;
+using LoadWatch.Service.Arrivals;
+using LoadWatch.Service.Configuration;
+using LoadWatch.Storage.Archives;
+using LoadWatch.Storage.Recordings;
+using NodaTime;
+
+namespace LoadWatch.Service.Pipeline;
+
+/// <summary>From bytes to a judged arrival with all its values. Pure but for reading the archive; safe to use from several threads.</summary>
+public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSet decoders, Archive archive, Instant now)
+{
+    /// <param name="claims">Ids of the people whom all sightings of the content name.</param>
+    public DecodedArrival Decode(ArrivalContent content, IReadOnlyCollection<string> claims)
+    {
+        var kind = content.Kind.ToString().ToLowerInvariant();
+        if (content.Kind is ContentKind.Gzip or ContentKind.Zip)
+        {
+            return new DecodedArrival(content.Sha, kind, ContainerVerdict(content), []);
+        }
+
+        var file = decoders.Decode(content.Bytes);
+        var verdict = ArrivalVerdict.Of(file, claims, now);
+        return new DecodedArrival(content.Sha, file.Kind, verdict, verdict.Person is { } person ? Compute(content.Sha, file, person) : []);
+    }
+
+    /// <summary>The content of a known arrival, read back from the archive: the object itself, or the member of it that has this hash.</summary>
+    /// <exception cref="InvalidDataException">The archive does not hold it any more.</exception>
+    public ArrivalContent Read(Arrival arrival, string path) =>
+        ArrivalContent.Expand(decoders, arrival.ObjectSha, path, archive.Read(arrival.ObjectSha)).FirstOrDefault(content => content.Sha == arrival.Sha)
+        ?? throw new InvalidDataException($"the archive object {arrival.ObjectSha[..12]} no longer holds {arrival.Sha[..12]}");
+
+    /// <summary>Computes the values of one recording of a stored arrival again.</summary>
+    public ActivityValues Recompute(Arrival arrival, int part)
+    {
+        var file = decoders.Decode(Read(arrival, "").Bytes);
+        var recording = file.Recordings.First(candidate => candidate.Part == part);
+        return ActivityComputation.Compute(
+            recording, configuration.People[arrival.Person!], configuration.Anchors, configuration.Computation);
+    }
+
+    private List<ComputedRecording> Compute(string sha, DecodedFile file, string personId)
+    {
+        var person = configuration.People[personId];
+        return file.Recordings
+            .Where(recording => ArrivalVerdict.IsUsable(recording, now))
+            .Select(recording => new ComputedRecording(
+                RecordingSummaries.Of(sha, recording, person, file.SourceName),
+                ActivityComputation.Compute(recording, person, configuration.Anchors, configuration.Computation)))
+            .ToList();
+    }
+
+    private static ArrivalVerdict ContainerVerdict(ArrivalContent content)
+    {
+        var problem = content.Problems.Count > 0 ? content.Problems[0].ToString() : null;
+        return content.Members == 0
+            ? new ArrivalVerdict(ArrivalState.Refused, problem ?? "an archive without files", null)
+            : new ArrivalVerdict(ArrivalState.Aside, problem ?? $"an archive of {content.Members} files, each an arrival of its own", null);
+    }
+}

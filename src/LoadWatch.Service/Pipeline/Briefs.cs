@@ -1,0 +1,118 @@
+using LoadWatch.Alerts;
+using LoadWatch.Days;
+using LoadWatch.Delivery.Page;
+using LoadWatch.Notices;
+using LoadWatch.People;
+using LoadWatch.Recordings;
+using LoadWatch.Service.Arrivals;
+using LoadWatch.Service.Configuration;
+using LoadWatch.Storage;
+using LoadWatch.Storage.Recordings;
+using NodaTime;
+
+namespace LoadWatch.Service.Pipeline;
+
+/// <summary>Builds the briefs of contacts from what is stored, and decides those that are due.</summary>
+public sealed class Briefs(WorkingConfiguration configuration, Instant now)
+{
+    private const int DaysBack = 400;
+    private const int RemarkDays = 14;
+    private const int RefusedDays = 7;
+
+    /// <summary>Where a notice goes. Mail joins here.</summary>
+    public static IReadOnlyList<string> Channels { get; } = ["page", "notice_file"];
+
+    /// <summary>Freezes every brief that is due, with its deliveries.</summary>
+    /// <returns>How many were decided.</returns>
+    public int Decide(StoreSession session)
+    {
+        var due = configuration.Contacts
+            .Where(contact => NoticePolicy.Decide(contact, now, session.Notices.Exists) == NoticeReason.BriefDue)
+            .ToList();
+        foreach (var contact in due)
+        {
+            var brief = Build(session, contact);
+            var notice = new Notice(
+                NoticePolicy.BriefKey(contact, brief.Date),
+                contact.Id,
+                brief.Date,
+                BriefText.Subject(brief),
+                BriefText.Write(brief),
+                PageRenderer.Render(brief),
+                NoticeReason.BriefDue);
+            session.Notices.Add(notice, session.Alerts.Changes.LastPosition(), Channels.Select(channel => new Storage.Notices.Delivery(channel, contact.Id)).ToList());
+        }
+
+        return due.Count;
+    }
+
+    /// <summary>The contact's brief as of now, due or not.</summary>
+    public Brief Build(StoreSession session, Contact contact)
+    {
+        var told = session.Notices.LastBrief(contact.Id)?.AlertPosition ?? 0;
+        var news = session.Alerts.Changes.Since(told).ToLookup(change => change.AlertId, StringComparer.Ordinal);
+        var subjects = configuration.PeopleOf(contact).Select(person => Subject(session, person, news)).ToList();
+        return BriefBuilder.Build(contact, now.InZone(contact.Zone).Date, subjects, Questions(session, contact));
+    }
+
+    private BriefSubject Subject(StoreSession session, Person person, ILookup<string, AlertChange> news)
+    {
+        var through = DayUpdate.LastDateOver(person, now);
+        var days = session.Days.OfPerson(person.Id, through.PlusDays(-DaysBack), through);
+        var alerts = session.Alerts.All(person.Id)
+            .Select(alert => News(alert, news[alert.Id].ToList()))
+            .Where(item => item.Alert.State is AlertState.Unacknowledged or AlertState.Acknowledged || item.ReturnedSince)
+            .ToList();
+        return new BriefSubject(person, configuration.Groups[person.Group], days, alerts, Remarks(days));
+    }
+
+    private static AlertNews News(Alert alert, List<AlertChange> changes)
+    {
+        var isOver = alert.State is AlertState.Normal or AlertState.Returned;
+        return new AlertNews(
+            alert,
+            changes.Exists(change => change.Reason is AlertChangeReason.Raised or AlertChangeReason.RaisedAgain or AlertChangeReason.SeverityRose),
+            isOver && changes.Exists(change => change.Reason is AlertChangeReason.ReturnedToNormal or AlertChangeReason.Corrected),
+            isOver && changes.Exists(change => change.Reason == AlertChangeReason.Corrected));
+    }
+
+    private static List<string> Remarks(IReadOnlyList<Day> days)
+    {
+        var recorded = days.TakeLast(RemarkDays).Where(day => day.State == DayState.Recorded).ToList();
+        var without = recorded.Count(day => day.Load is null);
+        return without == 0
+            ? []
+            : [$"load unknown on {without} of {recorded.Count} recorded days of the last {RemarkDays}: no usable heart rate, or a reference value is missing"];
+    }
+
+    private List<BriefLine> Questions(StoreSession session, Contact contact)
+    {
+        if (contact.People.Count > 0)
+        {
+            return [];
+        }
+
+        var people = configuration.PeopleOf(contact).Select(person => person.Id).ToHashSet(StringComparer.Ordinal);
+        return session.Arrivals.All()
+            .Where(arrival => arrival.State is ArrivalState.Held or ArrivalState.Refused)
+            .Select(arrival => (arrival, Sightings: session.Sightings.Of(arrival.Sha)))
+            .Where(item => Concerns(item.Sightings, people) && (item.arrival.State == ArrivalState.Held || IsRecent(item.Sightings)))
+            .Select(item => new BriefLine(item.Sightings[0].Path, Sentence(item.arrival)))
+            .OrderBy(line => line.Subject, StringComparer.Ordinal)
+            .ToList();
+    }
+
+    /// <summary>Files of nobody concern every contact of a group; files of somebody only those who are told about that person.</summary>
+    private bool Concerns(IReadOnlyList<Sighting> sightings, HashSet<string> people)
+    {
+        var claims = Attribution.Claims(sightings.Select(sighting => sighting.Path), configuration.People);
+        return claims.Count == 0 || claims.Any(people.Contains);
+    }
+
+    private bool IsRecent(IReadOnlyList<Sighting> sightings) =>
+        sightings.Any(sighting => sighting.FirstSeen >= now - Duration.FromDays(RefusedDays));
+
+    private static string Sentence(Arrival arrival) => arrival.State == ArrivalState.Held
+        ? $"held: {arrival.Reason}"
+        : $"not usable: {arrival.Reason}";
+}

@@ -1,0 +1,11 @@
+using LoadWatch.Activities;
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Service.Pipeline;
+
+/// <summary>An arrival decoded, judged and computed, ready for its one commit.</summary>
+/// <param name="Kind"><c>fit</c>, <c>csv</c>, <c>gzip</c>, <c>zip</c> or <c>unknown</c>.</param>
+/// <param name="Recordings">Where stored: its recordings with everything computed from them; else empty.</param>
+public sealed record DecodedArrival(string Sha, string Kind, ArrivalVerdict Verdict, IReadOnlyList<ComputedRecording> Recordings);
+
+public sealed record ComputedRecording(RecordingSummary Summary, ActivityValues Values);

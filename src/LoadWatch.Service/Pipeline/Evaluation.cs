@@ -1,0 +1,45 @@
+using LoadWatch.Alerts;
+using LoadWatch.People;
+using LoadWatch.Service.Configuration;
+using LoadWatch.Storage;
+using NodaTime;
+
+namespace LoadWatch.Service.Pipeline;
+
+/// <summary>Judges alerts at the evaluation date and decides notices, in one transaction (I-7, I-14).</summary>
+public sealed class Evaluation(WorkingConfiguration configuration, Briefs briefs, Instant now, SweepReport report)
+{
+    public void Run(StoreSession session)
+    {
+        foreach (var person in configuration.People.Values.OrderBy(person => person.Id, StringComparer.Ordinal))
+        {
+            Judge(session, person);
+        }
+
+        report.NoticesDecided += briefs.Decide(session);
+    }
+
+    private void Judge(StoreSession session, Person person)
+    {
+        var date = DayUpdate.LastDateOver(person, now);
+        var review = AlertReview.Review(
+            person.Id,
+            date,
+            session.Alerts.Open(person.Id),
+            id => session.Alerts.Changes.NextSequence(id) - 1,
+            session.Findings.OfPerson(person.Id, date, date),
+            session.Findings.Held);
+        foreach (var alert in review.Alerts)
+        {
+            session.Alerts.Put(alert);
+        }
+
+        foreach (var change in review.Changes)
+        {
+            session.Alerts.Changes.Append(change);
+        }
+
+        report.AlertChanges += review.Changes.Count;
+        session.Evaluations.Add(person.Group, date, configuration.Hash);
+    }
+}

@@ -1,0 +1,86 @@
+using LoadWatch.Decoding;
+using LoadWatch.Service.Arrivals;
+using LoadWatch.Service.Configuration;
+using LoadWatch.Storage;
+using LoadWatch.Storage.Archives;
+using LoadWatch.Storage.Files;
+using NodaTime;
+
+namespace LoadWatch.Service.Pipeline;
+
+/// <summary>
+/// Takes changed files in, in groups that share one folder sync and two commits. The order of I-2: durable copy, rename, folder sync, commit "waiting",
+/// decode, commit of all effects, and only then the inbox.
+/// </summary>
+public sealed class Intake(
+    WorkingConfiguration configuration, Store store, Archive archive, DecoderSet decoders, Settlement settlement, Instant now, SweepReport report)
+{
+    private const int GroupFiles = 64;
+    private const long GroupBytes = 64L * 1024 * 1024;
+
+    public void TakeIn(IReadOnlyList<(FoundFile File, FileStamp Stamp)> files, CancellationToken cancel)
+    {
+        var taker = new FileTaker(configuration, archive, decoders, now, report);
+        foreach (var group in Groups(files))
+        {
+            cancel.ThrowIfCancellationRequested();
+            var taken = group.Select(taker.Take).OfType<TakenFile>().ToList();
+            if (taken.Count > 0)
+            {
+                TakeGroup(taken);
+            }
+        }
+    }
+
+    private void TakeGroup(List<TakenFile> taken)
+    {
+        archive.Commit(taken.ConvertAll(file => file.Copy));
+        KillPoint.Pass("archived");
+        store.Write(session => RecordWaiting(session, taken));
+        KillPoint.Pass("waiting");
+        settlement.Settle(Contents(taken), force: false);
+        KillPoint.Pass("settled");
+        foreach (var file in taken.Where(file => file.File.Inbox.Take == TakeMode.Move))
+        {
+            InboxRemoval.Remove(file);
+        }
+    }
+
+    private void RecordWaiting(StoreSession session, List<TakenFile> taken)
+    {
+        foreach (var file in taken)
+        {
+            session.Arrivals.AddWaiting(file.Copy.Sha, null, file.Copy.Sha, file.Copy.Size);
+            session.Sightings.Upsert(file.File.Inbox.Name, file.File.Path, file.Copy.Sha, now, file.Stamp);
+        }
+    }
+
+    private List<SeenContent> Contents(List<TakenFile> taken) =>
+        taken.AsParallel().AsOrdered()
+            .SelectMany(file => ArrivalContent.Expand(decoders, file.Copy.Sha, file.File.Path, file.Copy.Bytes)
+                .Select(content => new SeenContent(content, file)))
+            .ToList();
+
+    private static IEnumerable<List<FoundFile>> Groups(IReadOnlyList<(FoundFile File, FileStamp Stamp)> files)
+    {
+        var group = new List<FoundFile>();
+        long bytes = 0;
+        foreach (var (file, stamp) in files)
+        {
+            if (group.Count > 0 && (group.Count == GroupFiles || bytes + stamp.Size > GroupBytes))
+            {
+                yield return group;
+                group = [];
+                bytes = 0;
+            }
+
+            group.Add(file);
+            bytes += stamp.Size;
+        }
+
+        if (group.Count > 0)
+        {
+            yield return group;
+        }
+    }
+}

@@ -1,0 +1,41 @@
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Service.Pipeline;
+
+/// <summary>What one sweep did, in counts.</summary>
+public sealed class SweepReport
+{
+    /// <summary>Files seen in the inboxes.</summary>
+    public int Seen { get; set; }
+
+    /// <summary>Files that may still be growing and are looked at again.</summary>
+    public int Settling { get; set; }
+
+    /// <summary>Files that could not be opened or read, with the reason; looked at again.</summary>
+    public List<string> Unreadable { get; } = [];
+
+    /// <summary>Inboxes that could not be listed.</summary>
+    public List<string> MissingInboxes { get; } = [];
+
+    /// <summary>Arrivals settled by this sweep, by state; members of archives count on their own.</summary>
+    public SortedDictionary<ArrivalState, int> Settled { get; } = [];
+
+    /// <summary>People whose days were computed.</summary>
+    public int PeopleComputed { get; set; }
+
+    /// <summary>Alerts raised, risen or returned.</summary>
+    public int AlertChanges { get; set; }
+
+    /// <summary>Notices decided by this sweep.</summary>
+    public int NoticesDecided { get; set; }
+
+    /// <summary>Deliveries that did not go through and are tried again, with the reason.</summary>
+    public List<string> Undelivered { get; } = [];
+
+    /// <summary>Pages that stand after the sweep.</summary>
+    public List<string> Pages { get; } = [];
+
+    public int CountOf(ArrivalState state) => Settled.GetValueOrDefault(state);
+
+    public void Count(ArrivalState state) => Settled[state] = CountOf(state) + 1;
+}

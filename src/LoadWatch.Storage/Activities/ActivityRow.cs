@@ -1,0 +1,67 @@
+using LoadWatch.Activities;
+using LoadWatch.Loads;
+using LoadWatch.Recordings;
+using LoadWatch.Stimulus;
+using LoadWatch.Storage.Dialects;
+using LoadWatch.Storage.Recordings;
+using NodaTime;
+
+namespace LoadWatch.Storage.Activities;
+
+/// <summary>A row of <c>activity</c> beside that of its winning recording.</summary>
+internal sealed class ActivityRow : RecordingRow
+{
+    public string Key { get; init; } = "";
+
+    public LocalDate Date { get; init; }
+
+    public string Recordings { get; init; } = "";
+
+    public double? HeartRateMeanBpm { get; init; }
+
+    public int? HeartRateMaxBpm { get; init; }
+
+    public double? PowerMeanWatts { get; init; }
+
+    public double? PowerMaxWatts { get; init; }
+
+    public string UsableShare { get; init; } = "";
+
+    public string TimesInZone { get; init; } = "";
+
+    public string Remarks { get; init; } = "";
+
+    public static ActivityRow From(StoredActivity activity) => new()
+    {
+        Key = activity.Key,
+        Sha = activity.Winner.Sha,
+        Part = activity.Winner.Part,
+        Person = activity.Winner.Person,
+        Date = activity.Winner.Date,
+        Recordings = JsonText.Write(activity.RecordingKeys),
+        HeartRateMeanBpm = activity.Values.HeartRateMeanBpm,
+        HeartRateMaxBpm = activity.Values.HeartRateMaxBpm,
+        PowerMeanWatts = activity.Values.PowerMeanWatts,
+        PowerMaxWatts = activity.Values.PowerMaxWatts,
+        UsableShare = JsonText.WriteSorted(activity.Values.UsableShare),
+        TimesInZone = JsonText.Write(activity.Values.TimesInZone),
+        Remarks = JsonText.Write(activity.Values.Remarks),
+    };
+
+    public StoredActivity ToActivity(IEnumerable<Quantity> quantities, IEnumerable<RegionStimulus> stimulus)
+    {
+        var values = new ActivityValues
+        {
+            HeartRateMeanBpm = HeartRateMeanBpm,
+            HeartRateMaxBpm = HeartRateMaxBpm,
+            PowerMeanWatts = PowerMeanWatts,
+            PowerMaxWatts = PowerMaxWatts,
+            UsableShare = JsonText.Read<Dictionary<Channel, double>>(UsableShare),
+            TimesInZone = JsonText.Read<List<TimeInZone>>(TimesInZone),
+            Remarks = JsonText.Read<List<string>>(Remarks),
+            Quantities = [.. quantities.OrderBy(quantity => quantity.Name, StringComparer.Ordinal)],
+            Stimulus = [.. stimulus.OrderBy(region => region.Region)],
+        };
+        return new StoredActivity(ToRecording(), values, JsonText.Read<List<string>>(Recordings));
+    }
+}

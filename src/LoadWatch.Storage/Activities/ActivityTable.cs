@@ -1,0 +1,97 @@
+using LoadWatch.Activities;
+using LoadWatch.Recordings;
+using LoadWatch.Storage.Dialects;
+using LoadWatch.Storage.Recordings;
+using NodaTime;
+
+namespace LoadWatch.Storage.Activities;
+
+/// <summary>Tables <c>activity</c>, <c>histogram</c>, <c>quantity</c> and <c>stimulus</c>: what counts, and what was computed of it.</summary>
+public sealed class ActivityTable
+{
+    private const string Insert = """
+        INSERT INTO activity (
+            key, sha, part, person, date, recordings, heart_rate_mean_bpm, heart_rate_max_bpm,
+            power_mean_watts, power_max_watts, usable_share, times_in_zone, remarks)
+        VALUES (
+            @Key, @Sha, @Part, @Person, @Date, @Recordings, @HeartRateMeanBpm, @HeartRateMaxBpm,
+            @PowerMeanWatts, @PowerMaxWatts, @UsableShare, @TimesInZone, @Remarks)
+        """;
+
+    private const string InsertHistogram = "INSERT INTO histogram (activity, channel, bins) VALUES (@activity, @channel, @bins)";
+
+    private const string InsertQuantity =
+        "INSERT INTO quantity (activity, name, value, unit, estimated) VALUES (@Activity, @Name, @Value, @Unit, @Estimated)";
+
+    private const string InsertStimulus = """
+        INSERT INTO stimulus (
+            activity, region, grade, channel, hard_bouts_low, hard_bouts_mid, hard_bouts_high,
+            hard_repetitions_low, hard_repetitions_mid, hard_repetitions_high, hard_sets,
+            slow_seconds_low, slow_seconds_mid, slow_seconds_high, medium_seconds_low, medium_seconds_mid, medium_seconds_high,
+            large_seconds_low, large_seconds_mid, large_seconds_high, not_seen)
+        VALUES (
+            @Activity, @Region, @Grade, @Channel, @HardBoutsLow, @HardBoutsMid, @HardBoutsHigh,
+            @HardRepetitionsLow, @HardRepetitionsMid, @HardRepetitionsHigh, @HardSets,
+            @SlowSecondsLow, @SlowSecondsMid, @SlowSecondsHigh, @MediumSecondsLow, @MediumSecondsMid, @MediumSecondsHigh,
+            @LargeSecondsLow, @LargeSecondsMid, @LargeSecondsHigh, @NotSeen)
+        """;
+
+    // The rows of the other tables go with it.
+    private const string Delete = "DELETE FROM activity WHERE key = @key";
+
+    private const string SelectActivities = """
+        SELECT r.*, a.key, a.date, a.recordings, a.heart_rate_mean_bpm, a.heart_rate_max_bpm,
+            a.power_mean_watts, a.power_max_watts, a.usable_share, a.times_in_zone, a.remarks
+        FROM activity a JOIN recording r ON r.sha = a.sha AND r.part = a.part
+        """;
+
+    private const string SelectQuantities = "SELECT t.* FROM quantity t JOIN activity a ON a.key = t.activity";
+    private const string SelectStimulus = "SELECT t.* FROM stimulus t JOIN activity a ON a.key = t.activity";
+    private const string InDates = " WHERE a.date >= @from AND a.date <= @to";
+    private const string OfPersonInDates = InDates + " AND a.person = @person";
+    private const string SelectHistogram = "SELECT bins FROM histogram WHERE activity = @key AND channel = @channel";
+
+    private readonly StoreSession session;
+
+    internal ActivityTable(StoreSession session) => this.session = session;
+
+    /// <summary>Stores an activity in place of the one of the same key. Its winner must be among the recordings.</summary>
+    public void Put(StoredActivity activity)
+    {
+        Remove(activity.Key);
+        session.Execute(Insert, ActivityRow.From(activity));
+        session.ExecuteEach(InsertHistogram, HistogramRows(activity));
+        session.ExecuteEach(InsertQuantity, activity.Values.Quantities.Select(quantity => QuantityRow.From(activity.Key, quantity)));
+        session.ExecuteEach(InsertStimulus, activity.Values.Stimulus.Select(stimulus => StimulusRow.From(activity.Key, stimulus)));
+    }
+
+    /// <summary>Removes an activity; nothing when there is none.</summary>
+    public void Remove(string key) => session.Execute(Delete, new { key });
+
+    /// <summary>A person's activities whose date is in the range, both ends included, sorted by date, start and key.</summary>
+    public IReadOnlyList<StoredActivity> OfPerson(string person, LocalDate? from = null, LocalDate? to = null) =>
+        Select(OfPersonInDates, new { person, from = from ?? LocalDate.MinIsoValue, to = to ?? LocalDate.MaxIsoValue });
+
+    /// <summary>Everybody's activities whose date is in the range, both ends included, sorted by date, start and key.</summary>
+    public IReadOnlyList<StoredActivity> All(LocalDate? from = null, LocalDate? to = null) =>
+        Select(InDates, new { from = from ?? LocalDate.MinIsoValue, to = to ?? LocalDate.MaxIsoValue });
+
+    /// <summary>Time by value of one channel, or null where the activity has none.</summary>
+    public Histogram? Histogram(string key, Channel channel) =>
+        session.Value<byte[]>(SelectHistogram, new { key, channel = Words<Channel>.Of(channel) }) is { } bins ? HistogramCodec.Read(bins) : null;
+
+    private static IEnumerable<object> HistogramRows(StoredActivity activity) =>
+        activity.Values.Histograms
+            .OrderBy(pair => pair.Key)
+            .Select(pair => new { activity = activity.Key, channel = Words<Channel>.Of(pair.Key), bins = HistogramCodec.Write(pair.Value) });
+
+    private List<StoredActivity> Select(string where, object values)
+    {
+        var quantities = session.Rows<QuantityRow>(SelectQuantities + where, values)
+            .ToLookup(row => row.Activity, row => row.ToQuantity(), StringComparer.Ordinal);
+        var stimulus = session.Rows<StimulusRow>(SelectStimulus + where, values)
+            .ToLookup(row => row.Activity, row => row.ToStimulus(), StringComparer.Ordinal);
+        return session.Rows<ActivityRow>(SelectActivities + where + " ORDER BY a.date, r.start, a.key", values)
+            .ConvertAll(row => row.ToActivity(quantities[row.Key], stimulus[row.Key]));
+    }
+}

@@ -1,0 +1,106 @@
+using LoadWatch.Days;
+using LoadWatch.Stimulus;
+using LoadWatch.Storage.Dialects;
+using NodaTime;
+
+namespace LoadWatch.Storage.Days;
+
+/// <summary>A row of <c>day</c>.</summary>
+internal sealed class DayRow
+{
+    public string Person { get; init; } = "";
+
+    public LocalDate Date { get; init; }
+
+    public string State { get; init; } = "";
+
+    public string? StateSource { get; init; }
+
+    public double? Load { get; init; }
+
+    public double? Acute { get; init; }
+
+    public double? Chronic { get; init; }
+
+    public double? ChronicBefore { get; init; }
+
+    public double? RatioCoupled { get; init; }
+
+    public double? RatioUncoupled { get; init; }
+
+    public double? RatioEwma { get; init; }
+
+    public double? EwmaAcute { get; init; }
+
+    public double? EwmaChronic { get; init; }
+
+    public double? WeeklyChange { get; init; }
+
+    public double? Monotony { get; init; }
+
+    public double? Strain { get; init; }
+
+    public double? ChronicMedian { get; init; }
+
+    public double Coverage7 { get; init; }
+
+    public double Coverage28 { get; init; }
+
+    public int? DaysSinceFirstCovered { get; init; }
+
+    public int? DaysSinceRecorded { get; init; }
+
+    public string Regions { get; init; } = "";
+
+    public static DayRow From(Day day) => new()
+    {
+        Person = day.Person,
+        Date = day.Date,
+        State = Words<DayState>.Of(day.State),
+        StateSource = day.StateSource,
+        Load = day.Load,
+        Acute = day.Acute,
+        Chronic = day.Chronic,
+        ChronicBefore = day.ChronicBefore,
+        RatioCoupled = day.RatioCoupled,
+        RatioUncoupled = day.RatioUncoupled,
+        RatioEwma = day.RatioEwma,
+        EwmaAcute = day.EwmaAcute,
+        EwmaChronic = day.EwmaChronic,
+        WeeklyChange = day.WeeklyChange,
+        Monotony = day.Monotony,
+        Strain = day.Strain,
+        ChronicMedian = day.ChronicMedian,
+        Coverage7 = day.Coverage7,
+        Coverage28 = day.Coverage28,
+        DaysSinceFirstCovered = day.DaysSinceFirstCovered,
+        DaysSinceRecorded = day.DaysSinceRecorded,
+        Regions = JsonText.WriteSorted(day.Regions),
+    };
+
+    public Day ToDay() => new()
+    {
+        Person = Person,
+        Date = Date,
+        State = Words<DayState>.Parse(State),
+        StateSource = StateSource,
+        Load = Load,
+        Acute = Acute,
+        Chronic = Chronic,
+        ChronicBefore = ChronicBefore,
+        RatioCoupled = RatioCoupled,
+        RatioUncoupled = RatioUncoupled,
+        RatioEwma = RatioEwma,
+        EwmaAcute = EwmaAcute,
+        EwmaChronic = EwmaChronic,
+        WeeklyChange = WeeklyChange,
+        Monotony = Monotony,
+        Strain = Strain,
+        ChronicMedian = ChronicMedian,
+        Coverage7 = Coverage7,
+        Coverage28 = Coverage28,
+        DaysSinceFirstCovered = DaysSinceFirstCovered,
+        DaysSinceRecorded = DaysSinceRecorded,
+        Regions = JsonText.Read<Dictionary<BodyRegion, RegionDay>>(Regions),
+    };
+}

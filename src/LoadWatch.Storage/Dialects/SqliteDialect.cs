@@ -1,0 +1,128 @@
+using System.Data.Common;
+using System.Globalization;
+using Dapper;
+using LoadWatch.Storage.Files;
+using Microsoft.Data.Sqlite;
+
+namespace LoadWatch.Storage.Dialects;
+
+/// <summary>SQLite, the embedded default: write-ahead log, every commit synced, one writer.</summary>
+public sealed class SqliteDialect : Dialect
+{
+    /// <summary>Marks the file as ours: <c>LdWt</c> in ASCII.</summary>
+    public const int ApplicationId = 0x4C645774;
+
+    // Below it, a bug of the write-ahead log's reset can lose commits.
+    private static readonly Version OldestSqlite = new(3, 51, 3);
+
+    private const int NotADatabase = 26;
+    private const int IoErrorOnSync = 10 | (4 << 8);
+    private const int IoErrorOnFolderSync = 10 | (5 << 8);
+
+    private readonly string path;
+    private readonly string connectionString;
+
+    public SqliteDialect(string path)
+    {
+        this.path = path;
+
+        // The provider retries a busy database itself until this timeout (seconds); the engine's own setting would come on top.
+        connectionString = new SqliteConnectionStringBuilder
+        {
+            DataSource = path,
+            DefaultTimeout = 5,
+            ForeignKeys = true,
+            Pooling = false,
+        }.ConnectionString;
+    }
+
+    public override string ClaimClause => "";
+
+    public override void Prepare()
+    {
+        // Made here with its mode; SQLite gives its side files the mode of the database.
+        PrivateFiles.OpenOrCreate(path, FileShare.ReadWrite).Dispose();
+        RefuseForeign();
+        using var connection = OpenWriter();
+        new SqliteSchema(connectionString).Upgrade(connection);
+    }
+
+    public override DbConnection OpenWriter() => Open("PRAGMA query_only=OFF");
+
+    public override DbConnection OpenReader() => Open("PRAGMA query_only=ON");
+
+    public override DbTransaction BeginWrite(DbConnection connection) => ((SqliteConnection)connection).BeginTransaction(deferred: false);
+
+    public override DbTransaction BeginRead(DbConnection connection) => ((SqliteConnection)connection).BeginTransaction(deferred: true);
+
+    public override bool LostDurability(DbException error) =>
+        error is SqliteException { SqliteExtendedErrorCode: IoErrorOnSync or IoErrorOnFolderSync };
+
+    public override bool Checkpoint(DbConnection connection) => connection.ExecuteScalar<long>("PRAGMA wal_checkpoint(TRUNCATE)") == 0;
+
+    public override IReadOnlyList<string> Check(DbConnection connection) =>
+        [.. connection.Query<string>("PRAGMA integrity_check").Where(line => !string.Equals(line, "ok", StringComparison.Ordinal))];
+
+    internal static void RefuseOldEngine(string version)
+    {
+        if (Version.Parse(version) < OldestSqlite)
+        {
+            throw new DatabaseRefusedException($"SQLite {version} is too old: {OldestSqlite} or later is needed");
+        }
+    }
+
+    private SqliteConnection Open(string access)
+    {
+        var connection = new SqliteConnection(connectionString);
+        try
+        {
+            connection.Open();
+            connection.Execute("PRAGMA journal_mode=WAL");
+            connection.Execute("PRAGMA synchronous=FULL");
+            connection.Execute("PRAGMA trusted_schema=OFF");
+            connection.Execute("PRAGMA cell_size_check=ON");
+            connection.Execute("PRAGMA temp_store=MEMORY");
+            connection.Execute("PRAGMA secure_delete=ON");
+            connection.Execute(access);
+            return connection;
+        }
+        catch
+        {
+            connection.Dispose();
+            throw;
+        }
+    }
+
+    // On a bare connection: even a change of the journal would leave its mark in another program's file.
+    private void RefuseForeign()
+    {
+        using var connection = new SqliteConnection(connectionString);
+        try
+        {
+            connection.Open();
+            RefuseOldEngine(connection.ServerVersion);
+            MarkOrRefuse(connection);
+        }
+        catch (SqliteException error) when (error.SqliteErrorCode == NotADatabase)
+        {
+            throw new DatabaseRefusedException($"{path} is no SQLite database: left as it is");
+        }
+    }
+
+    // The mark goes into the empty file before any table, so a kill in between leaves no file that looks foreign.
+    private void MarkOrRefuse(SqliteConnection connection)
+    {
+        var id = connection.ExecuteScalar<long>("PRAGMA application_id");
+        if (id == ApplicationId)
+        {
+            return;
+        }
+
+        if (id != 0 || connection.ExecuteScalar<long>("SELECT COUNT(*) FROM sqlite_master") > 0)
+        {
+            throw new DatabaseRefusedException($"{path} is a database of another program (application id {id}): left as it is");
+        }
+
+        connection.Execute(string.Create(CultureInfo.InvariantCulture, $"PRAGMA application_id={ApplicationId}"));
+    }
+}

@@ -1,0 +1,108 @@
+using System.Runtime.InteropServices;
+
+namespace LoadWatch.Storage.Files;
+
+/// <summary>The steps that make a file survive a power cut, each a step of its own because their order is what counts (I-2).</summary>
+public static class DurableFile
+{
+    /// <summary>Makes the names in a folder durable. Windows has no such call: its file systems log names by themselves.</summary>
+    public static void SyncFolder(string path)
+    {
+        if (OperatingSystem.IsWindows())
+        {
+            return;
+        }
+
+        var descriptor = LinuxCalls.Open(path, LinuxCalls.OnlyFolder | LinuxCalls.CloseOnExec);
+        if (descriptor < 0)
+        {
+            throw Failed("open folder", path);
+        }
+
+        try
+        {
+            if (LinuxCalls.Sync(descriptor) != 0)
+            {
+                throw Failed("sync folder", path);
+            }
+        }
+        finally
+        {
+            _ = LinuxCalls.Close(descriptor);
+        }
+    }
+
+    /// <summary>Renames within one file system in one step. False, and nothing changed, when the new name is taken.</summary>
+    /// <exception cref="IOException">The system refused for another reason.</exception>
+    public static bool RenameWithoutOverwrite(string from, string to) =>
+        OperatingSystem.IsLinux() ? RenameOnLinux(from, to) : RenameElsewhere(from, to);
+
+    /// <summary>Writes a whole file in place of another: aside, to the disk, renamed. A reader meets the old or the new one.</summary>
+    public static void Replace(string path, ReadOnlySpan<byte> bytes)
+    {
+        var aside = path + ".part";
+        File.Delete(aside);
+        using (var file = PrivateFiles.OpenOrCreate(aside, FileShare.None))
+        {
+            file.Write(bytes);
+            file.Flush(flushToDisk: true);
+        }
+
+        File.Move(aside, path, overwrite: true);
+    }
+
+    private static bool RenameOnLinux(string from, string to)
+    {
+        switch (RenameInOneStep(from, to))
+        {
+            case 0:
+                return true;
+            case Errno.Exists:
+                return false;
+            case Errno.NoSystemCall or Errno.Invalid:
+                return RenameByLink(from, to);
+            default:
+                throw Failed("rename to", to);
+        }
+    }
+
+    private static int RenameInOneStep(string from, string to)
+    {
+        try
+        {
+            var outcome = LinuxCalls.Rename(LinuxCalls.CurrentFolder, from, LinuxCalls.CurrentFolder, to, LinuxCalls.NoReplace);
+            return outcome == 0 ? 0 : Marshal.GetLastPInvokeError();
+        }
+        catch (EntryPointNotFoundException)
+        {
+            return Errno.NoSystemCall;
+        }
+    }
+
+    // For file systems that cannot rename without overwriting. A kill between the two calls leaves both names, the content whole under each.
+    internal static bool RenameByLink(string from, string to)
+    {
+        if (LinuxCalls.Link(from, to) != 0)
+        {
+            return Marshal.GetLastPInvokeError() == Errno.Exists ? false : throw Failed("link to", to);
+        }
+
+        File.Delete(from);
+        return true;
+    }
+
+    private static bool RenameElsewhere(string from, string to)
+    {
+        try
+        {
+            File.Move(from, to, overwrite: false);
+            return true;
+        }
+        catch (IOException) when (File.Exists(to) && File.Exists(from))
+        {
+            return false;
+        }
+    }
+
+    private static IOException Failed(string what, string path) => new($"could not {what} {path}: {Marshal.GetLastPInvokeErrorMessage()}");
+}

@@ -1,0 +1,96 @@
+using System.Runtime.InteropServices;
+
+namespace LoadWatch.Storage.Files;
+
+/// <summary>The system calls that .NET does not offer. Each returns -1 on error, with errno as the last P/Invoke error.</summary>
+internal static partial class LinuxCalls
+{
+    public const int CurrentFolder = -100;
+    public const int CloseOnExec = 0x80000;
+    public const int NonBlocking = 0x800;
+    public const uint NoReplace = 1;
+    public const int EmptyPath = 0x1000;
+    public const int NoFollowAt = 0x100;
+
+    /// <summary>Type, mode, size, times, inode: STATX_BASIC_STATS.</summary>
+    public const uint BasicStats = 0x7ff;
+
+    // The two flags differ between the generic and the ARM ABI.
+    public static readonly int OnlyFolder = OnArm ? 0x4000 : 0x10000;
+    public static readonly int NoFollow = OnArm ? 0x8000 : 0x20000;
+
+    private static bool OnArm => RuntimeInformation.ProcessArchitecture is Architecture.Arm64 or Architecture.Arm;
+
+    [LibraryImport("libc", EntryPoint = "open", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
+    public static partial int Open(string path, int flags);
+
+    [LibraryImport("libc", EntryPoint = "close", SetLastError = true)]
+    public static partial int Close(int descriptor);
+
+    [LibraryImport("libc", EntryPoint = "fsync", SetLastError = true)]
+    public static partial int Sync(int descriptor);
+
+    [LibraryImport("libc", EntryPoint = "statx", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
+    public static partial int Stat(int folder, string path, int flags, uint mask, out FileStatus status);
+
+    [LibraryImport("libc", EntryPoint = "renameat2", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
+    public static partial int Rename(int fromFolder, string from, int toFolder, string to, uint flags);
+
+    [LibraryImport("libc", EntryPoint = "link", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
+    public static partial int Link(string from, string to);
+
+    [LibraryImport("libc", EntryPoint = "umask")]
+    public static partial uint Umask(uint mask);
+}
+
+/// <summary>The kernel's <c>struct statx</c>, the same on every architecture.</summary>
+[StructLayout(LayoutKind.Explicit, Size = 256)]
+internal struct FileStatus
+{
+    private const int TypeMask = 0xF000;
+    private const int RegularType = 0x8000;
+    private const int FolderType = 0x4000;
+
+    [FieldOffset(28)]
+    public ushort Mode;
+
+    [FieldOffset(32)]
+    public ulong Inode;
+
+    [FieldOffset(40)]
+    public ulong Size;
+
+    [FieldOffset(112)]
+    public long ModifiedSeconds;
+
+    [FieldOffset(120)]
+    public uint ModifiedNanoseconds;
+
+    [FieldOffset(136)]
+    public uint DeviceMajor;
+
+    [FieldOffset(140)]
+    public uint DeviceMinor;
+
+    public readonly bool IsRegular => (Mode & TypeMask) == RegularType;
+
+    public readonly bool IsFolder => (Mode & TypeMask) == FolderType;
+
+    public readonly string Id => FormattableString.Invariant($"{DeviceMajor}.{DeviceMinor}:{Inode}");
+
+    public readonly FileStamp Stamp => new((long)Size, (ModifiedSeconds * 1000) + (ModifiedNanoseconds / 1_000_000), Id);
+}
+
+/// <summary>The numbers of errno that decide something; the same on every Linux architecture.</summary>
+internal static class Errno
+{
+    public const int NotPermitted = 1;
+    public const int NoEntry = 2;
+    public const int NoDevice = 6;
+    public const int AccessDenied = 13;
+    public const int Exists = 17;
+    public const int NotAFolder = 20;
+    public const int Invalid = 22;
+    public const int NoSystemCall = 38;
+    public const int Loop = 40;
+}

@@ -1,0 +1,103 @@
+using LoadWatch.Findings;
+using LoadWatch.Storage.Dialects;
+using NodaTime;
+
+namespace LoadWatch.Storage.Findings;
+
+/// <summary>Table <c>finding</c>: which rule held for whom on which date, with what it rests on (I-8).</summary>
+public sealed class FindingTable
+{
+    private const string Columns = "person, date, rule, region, severity, since, value, limit_value, unit, text, evidence";
+
+    private const string Insert = $"""
+        INSERT INTO finding ({Columns})
+        VALUES (@Person, @Date, @Rule, @Region, @Severity, @Since, @Value, @LimitValue, @Unit, @Text, @Evidence)
+        """;
+
+    private const string DeleteFrom = "DELETE FROM finding WHERE person = @person AND date >= @from";
+
+    private const string SelectOfPerson =
+        $"SELECT {Columns} FROM finding WHERE person = @person AND date >= @from AND date <= @to ORDER BY date, rule, region";
+
+    private const string CountHeld =
+        "SELECT COUNT(*) FROM finding WHERE person = @person AND date = @date AND rule = @rule AND region = @region";
+
+    private readonly StoreSession session;
+
+    internal FindingTable(StoreSession session) => this.session = session;
+
+    /// <summary>Stores a person's findings in place of all from a date on.</summary>
+    /// <exception cref="ArgumentException">A finding is of somebody else, or before that date.</exception>
+    public void Replace(string person, LocalDate from, IReadOnlyList<Finding> findings)
+    {
+        if (findings.FirstOrDefault(one => one.Date < from || !string.Equals(one.Person, person, StringComparison.Ordinal)) is { } stray)
+        {
+            throw new ArgumentException($"{stray.Date} of {stray.Person} is not among the findings of {person} from {from}", nameof(findings));
+        }
+
+        session.Execute(DeleteFrom, new { person, from });
+        session.ExecuteEach(Insert, findings.Select(Row.From));
+    }
+
+    /// <summary>A person's findings in the range, both ends included, sorted by date, rule and region.</summary>
+    public IReadOnlyList<Finding> OfPerson(string person, LocalDate? from = null, LocalDate? to = null) =>
+        session.Rows<Row>(SelectOfPerson, new { person, from = from ?? LocalDate.MinIsoValue, to = to ?? LocalDate.MaxIsoValue })
+            .ConvertAll(row => row.ToFinding());
+
+    /// <summary>Whether the finding holds on a date.</summary>
+    public bool Held(FindingKey key, LocalDate date) =>
+        session.Value<long>(CountHeld, new { person = key.Person, date, rule = key.Rule, region = RegionWord.Of(key.Region) }) > 0;
+
+    private sealed class Row
+    {
+        public string Person { get; init; } = "";
+
+        public LocalDate Date { get; init; }
+
+        public string Rule { get; init; } = "";
+
+        public string Region { get; init; } = "";
+
+        public string Severity { get; init; } = "";
+
+        public LocalDate Since { get; init; }
+
+        public double Value { get; init; }
+
+        public double LimitValue { get; init; }
+
+        public string Unit { get; init; } = "";
+
+        public string Text { get; init; } = "";
+
+        public string Evidence { get; init; } = "";
+
+        public static Row From(Finding finding) => new()
+        {
+            Person = finding.Person,
+            Date = finding.Date,
+            Rule = finding.Rule,
+            Region = RegionWord.Of(finding.Region),
+            Severity = Words<Severity>.Of(finding.Severity),
+            Since = finding.Since,
+            Value = finding.Value,
+            LimitValue = finding.Limit,
+            Unit = finding.Unit,
+            Text = finding.Text,
+            Evidence = JsonText.Write(finding.Evidence),
+        };
+
+        public Finding ToFinding() => new(
+            Person,
+            Date,
+            Rule,
+            RegionWord.Parse(Region),
+            Words<Severity>.Parse(Severity),
+            Since,
+            Value,
+            LimitValue,
+            Unit,
+            Text,
+            JsonText.Read<Evidence>(Evidence));
+    }
+}

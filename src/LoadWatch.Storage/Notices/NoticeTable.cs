@@ -1,0 +1,82 @@
+using LoadWatch.Notices;
+using LoadWatch.Storage.Dialects;
+using NodaTime;
+
+namespace LoadWatch.Storage.Notices;
+
+/// <summary>Tables <c>notice</c> and <c>delivery</c>: what was told to whom, and by which way it went out (I-7).</summary>
+public sealed class NoticeTable
+{
+    private const string Columns = "key, contact, date, subject, text, html, reason";
+
+    private const string Insert = $"""
+        INSERT INTO notice ({Columns}, kind, alert_position)
+        VALUES (@Key, @Contact, @Date, @Subject, @Text, @Html, @Reason, @Kind, @AlertPosition)
+        ON CONFLICT (key) DO NOTHING
+        """;
+
+    private const string InsertDelivery =
+        "INSERT INTO delivery (notice, channel, recipient, state, attempts) VALUES (@notice, @channel, @recipient, 'pending', 0)";
+
+    private const string SelectOne = $"SELECT {Columns} FROM notice WHERE key = @key";
+    private const string CountOne = "SELECT COUNT(*) FROM notice WHERE key = @key";
+
+    private const string SelectLastBrief =
+        "SELECT date, alert_position FROM notice WHERE contact = @contactId AND kind = 'brief' ORDER BY date DESC LIMIT 1";
+
+    private const string SelectPending = $"""
+        SELECT {Columns}, d.channel, d.recipient, d.attempts, d.last_error
+        FROM delivery d JOIN notice n ON n.key = d.notice
+        WHERE d.state = 'pending' ORDER BY n.date, n.key, d.channel, d.recipient
+        """;
+
+    private const string Deliver = """
+        UPDATE delivery SET state = 'delivered', last_error = NULL
+        WHERE notice = @noticeKey AND channel = @channel AND recipient = @recipient
+        """;
+
+    private const string Fail = """
+        UPDATE delivery SET attempts = attempts + 1, last_error = @error
+        WHERE notice = @noticeKey AND channel = @channel AND recipient = @recipient AND state = 'pending'
+        """;
+
+    private readonly StoreSession session;
+
+    internal NoticeTable(StoreSession session) => this.session = session;
+
+    public bool Exists(string key) => session.Value<long>(CountOne, new { key }) > 0;
+
+    public Notice? Get(string key) => session.Row<NoticeRow>(SelectOne, new { key })?.ToNotice();
+
+    /// <summary>The contact's latest brief, or null before any.</summary>
+    public LastBrief? LastBrief(string contactId) =>
+        session.Row<NoticeRow>(SelectLastBrief, new { contactId }) is { } row ? new LastBrief(row.Date, row.AlertPosition) : null;
+
+    /// <summary>Freezes a notice and asks for its deliveries. False, and nothing changed, when one of its key was decided before.</summary>
+    /// <param name="alertPosition">The last alert change that it knows of.</param>
+    /// <exception cref="ArgumentException">The key is not <c>contact|kind|local date</c> of this notice.</exception>
+    public bool Add(Notice notice, long alertPosition, IReadOnlyList<Delivery> deliveries)
+    {
+        if (session.Execute(Insert, NoticeRow.From(notice, alertPosition)) == 0)
+        {
+            return false;
+        }
+
+        session.ExecuteEach(InsertDelivery, deliveries.Select(way => new { notice = notice.Key, channel = way.Channel, recipient = way.Recipient }));
+        return true;
+    }
+
+    /// <summary>Every delivery that is still to be made, oldest notice first.</summary>
+    public IReadOnlyList<PendingDelivery> PendingDeliveries() =>
+        session.Rows<NoticeRow>(SelectPending)
+            .ConvertAll(row => new PendingDelivery(row.ToNotice(), new Delivery(row.Channel, row.Recipient), row.Attempts, row.LastError));
+
+    /// <summary>To be called after the channel took the notice over, never before.</summary>
+    public void MarkDelivered(string noticeKey, string channel, string recipient) =>
+        session.Execute(Deliver, new { noticeKey, channel, recipient });
+
+    /// <summary>Counts an attempt that failed; the delivery stays pending.</summary>
+    /// <param name="error">What the channel said.</param>
+    public void MarkFailed(string noticeKey, string channel, string recipient, string error) =>
+        session.Execute(Fail, new { noticeKey, channel, recipient, error });
+}

@@ -1,0 +1,50 @@
+using NodaTime;
+
+namespace LoadWatch.Storage.People;
+
+/// <summary>Table <c>person_state</c>: from which date on a person's days are to be computed again, and up to which they are.</summary>
+public sealed class PersonStateTable
+{
+    private const string Mark = """
+        INSERT INTO person_state (person, dirty_from) VALUES (@person, @from)
+        ON CONFLICT (person) DO UPDATE SET dirty_from = excluded.dirty_from
+        WHERE person_state.dirty_from IS NULL OR person_state.dirty_from > excluded.dirty_from
+        """;
+
+    private const string SelectDirty = "SELECT person, dirty_from FROM person_state WHERE dirty_from IS NOT NULL ORDER BY person";
+
+    private const string Clear = """
+        INSERT INTO person_state (person, computed_to) VALUES (@person, @through)
+        ON CONFLICT (person) DO UPDATE SET dirty_from = NULL, computed_to = excluded.computed_to
+        """;
+
+    private const string SelectComputed = "SELECT computed_to FROM person_state WHERE person = @person AND computed_to IS NOT NULL";
+
+    private readonly StoreSession session;
+
+    internal PersonStateTable(StoreSession session) => this.session = session;
+
+    /// <summary>Asks for a person's days from a date on; an earlier date asked for before stays.</summary>
+    public void MarkDirty(string person, LocalDate from) => session.Execute(Mark, new { person, from });
+
+    /// <summary>Whose days are to be computed again, sorted by person.</summary>
+    public IReadOnlyList<DirtyPerson> Dirty() => session.Rows<Row>(SelectDirty).ConvertAll(row => new DirtyPerson(row.Person, row.DirtyFrom));
+
+    /// <summary>Notes that a person's days are computed through a date, none of them dirty.</summary>
+    public void Computed(string person, LocalDate through) => session.Execute(Clear, new { person, through });
+
+    /// <summary>The last date computed, or null before any.</summary>
+    public LocalDate? ComputedTo(string person) => session.Row<Row>(SelectComputed, new { person })?.ComputedTo;
+
+    private sealed class Row
+    {
+        public string Person { get; init; } = "";
+
+        public LocalDate DirtyFrom { get; init; }
+
+        public LocalDate ComputedTo { get; init; }
+    }
+}
+
+/// <param name="From">The first date to compute.</param>
+public sealed record DirtyPerson(string Person, LocalDate From);

@@ -1,1 +1,0 @@
-namespace LoadWatch.Storage.Internal; internal static class Placeholder { }

@@ -1,0 +1,95 @@
+using LoadWatch.Recordings;
+using LoadWatch.Storage.Dialects;
+
+namespace LoadWatch.Storage.Recordings;
+
+/// <summary>Table <c>arrival</c>: what came in, once for each content (I-1).</summary>
+public sealed class ArrivalTable
+{
+    private const string Columns = "sha, parent_sha, object_sha, kind, state, reason, person, attempts, size";
+
+    private const string Insert = """
+        INSERT INTO arrival (sha, parent_sha, object_sha, state, attempts, size)
+        VALUES (@sha, @parentSha, @objectSha, 'waiting', 0, @size)
+        ON CONFLICT (sha) DO NOTHING
+        """;
+
+    private const string SelectOne = $"SELECT {Columns} FROM arrival WHERE sha = @sha";
+    private const string SelectWaiting = $"SELECT {Columns} FROM arrival WHERE state = 'waiting' ORDER BY sha";
+    private const string SelectAll = $"SELECT {Columns} FROM arrival ORDER BY sha";
+    private const string Count = "SELECT state, COUNT(*) AS number FROM arrival GROUP BY state";
+    private const string Update = "UPDATE arrival SET state = @state, kind = @kind, reason = @reason, person = @person WHERE sha = @sha";
+    private const string AddAttempt = "UPDATE arrival SET attempts = attempts + 1 WHERE sha = @sha";
+
+    private readonly StoreSession session;
+
+    internal ArrivalTable(StoreSession session) => this.session = session;
+
+    /// <summary>Notes an arrival as waiting. False, and nothing changed, when its content is known.</summary>
+    /// <param name="size">Bytes.</param>
+    public bool AddWaiting(string sha, string? parentSha, string objectSha, long size) =>
+        session.Execute(Insert, new { sha, parentSha, objectSha, size }) == 1;
+
+    public Arrival? Get(string sha) => session.Row<Row>(SelectOne, new { sha })?.ToArrival();
+
+    /// <summary>Every arrival not decoded yet, sorted by content.</summary>
+    public IReadOnlyList<Arrival> Waiting() => Select(SelectWaiting + session.Dialect.ClaimClause);
+
+    /// <summary>Every arrival, sorted by content.</summary>
+    public IReadOnlyList<Arrival> All() => Select(SelectAll);
+
+    /// <summary>Number of arrivals by state, each state named.</summary>
+    public IReadOnlyDictionary<ArrivalState, int> CountByState()
+    {
+        var counts = session.Rows<CountRow>(Count).ToDictionary(row => Words<ArrivalState>.Parse(row.State), row => row.Number);
+        return Enum.GetValues<ArrivalState>().ToDictionary(state => state, state => counts.GetValueOrDefault(state));
+    }
+
+    /// <exception cref="InvalidOperationException">There is no such arrival.</exception>
+    public void Settle(string sha, ArrivalState state, string? kind, string? reason, string? person) =>
+        OfOne(session.Execute(Update, new { sha, state = Words<ArrivalState>.Of(state), kind, reason, person }), sha);
+
+    /// <summary>Counts a decoding that brought its process down.</summary>
+    /// <exception cref="InvalidOperationException">There is no such arrival.</exception>
+    public void CountAttempt(string sha) => OfOne(session.Execute(AddAttempt, new { sha }), sha);
+
+    private static void OfOne(int changed, string sha)
+    {
+        if (changed != 1)
+        {
+            throw new InvalidOperationException($"no arrival {sha[..Math.Min(12, sha.Length)]}");
+        }
+    }
+
+    private List<Arrival> Select(string sql) => session.Rows<Row>(sql).ConvertAll(row => row.ToArrival());
+
+    private sealed class CountRow
+    {
+        public string State { get; init; } = "";
+
+        public int Number { get; init; }
+    }
+
+    private sealed class Row
+    {
+        public string Sha { get; init; } = "";
+
+        public string? ParentSha { get; init; }
+
+        public string ObjectSha { get; init; } = "";
+
+        public string? Kind { get; init; }
+
+        public string State { get; init; } = "";
+
+        public string? Reason { get; init; }
+
+        public string? Person { get; init; }
+
+        public int Attempts { get; init; }
+
+        public long Size { get; init; }
+
+        public Arrival ToArrival() => new(Sha, ParentSha, ObjectSha, Kind, Words<ArrivalState>.Parse(State), Reason, Person, Attempts, Size);
+    }
+}

@@ -1,0 +1,66 @@
+using LoadWatch.Storage.Files;
+using NodaTime;
+
+namespace LoadWatch.Storage.Recordings;
+
+/// <summary>Table <c>sighting</c>: under which names each content was seen; its latest rows are the cache that spares hashing.</summary>
+public sealed class SightingTable
+{
+    private const string Columns = "inbox, path, sha, first_seen, size, mtime, file_id, latest";
+
+    private const string Outdate = "UPDATE sighting SET latest = 0 WHERE inbox = @inbox AND path = @path AND sha <> @sha AND latest = 1";
+
+    private const string Insert = $"""
+        INSERT INTO sighting ({Columns})
+        VALUES (@inbox, @path, @sha, @firstSeen, @Size, @ModifiedUnixMs, @FileId, 1)
+        ON CONFLICT (inbox, path, sha) DO UPDATE SET size = excluded.size, mtime = excluded.mtime, file_id = excluded.file_id, latest = 1
+        """;
+
+    private const string SelectLatest = $"SELECT {Columns} FROM sighting WHERE inbox = @inbox AND latest = 1";
+    private const string SelectOf = $"SELECT {Columns} FROM sighting WHERE sha = @sha";
+
+    private readonly StoreSession session;
+
+    internal SightingTable(StoreSession session) => this.session = session;
+
+    /// <summary>The newest content of every name in an inbox, by path.</summary>
+    public IReadOnlyDictionary<string, Sighting> Latest(string inbox) =>
+        session.Rows<Row>(SelectLatest, new { inbox }).ToDictionary(row => row.Path, row => row.ToSighting(), StringComparer.Ordinal);
+
+    /// <summary>Notes that a name holds a content now. The first moment of the pair stays; the stamp is the new one.</summary>
+    public void Upsert(string inbox, string path, string sha, Instant firstSeen, FileStamp stamp)
+    {
+        session.Execute(Outdate, new { inbox, path, sha });
+        session.Execute(Insert, new { inbox, path, sha, firstSeen, stamp.Size, stamp.ModifiedUnixMs, stamp.FileId });
+    }
+
+    /// <summary>Every name of a content, sorted by inbox and path, ordinally: the first is the one shown (I-5).</summary>
+    public IReadOnlyList<Sighting> Of(string sha) =>
+    [
+        .. session.Rows<Row>(SelectOf, new { sha })
+            .Select(row => row.ToSighting())
+            .OrderBy(sighting => sighting.Inbox, StringComparer.Ordinal)
+            .ThenBy(sighting => sighting.Path, StringComparer.Ordinal),
+    ];
+
+    private sealed class Row
+    {
+        public string Inbox { get; init; } = "";
+
+        public string Path { get; init; } = "";
+
+        public string Sha { get; init; } = "";
+
+        public Instant FirstSeen { get; init; }
+
+        public long Size { get; init; }
+
+        public long Mtime { get; init; }
+
+        public string FileId { get; init; } = "";
+
+        public long Latest { get; init; }
+
+        public Sighting ToSighting() => new(Inbox, Path, Sha, FirstSeen, new FileStamp(Size, Mtime, FileId), Latest == 1);
+    }
+}

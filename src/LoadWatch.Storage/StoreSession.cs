@@ -1,0 +1,89 @@
+using System.Data.Common;
+using Dapper;
+using LoadWatch.Storage.Activities;
+using LoadWatch.Storage.Alerts;
+using LoadWatch.Storage.Audits;
+using LoadWatch.Storage.Configurations;
+using LoadWatch.Storage.Days;
+using LoadWatch.Storage.Dialects;
+using LoadWatch.Storage.Findings;
+using LoadWatch.Storage.Notices;
+using LoadWatch.Storage.People;
+using LoadWatch.Storage.Recordings;
+
+namespace LoadWatch.Storage;
+
+/// <summary>The tables within one transaction. Not to be kept beyond it.</summary>
+public sealed class StoreSession
+{
+    private readonly DbTransaction transaction;
+
+    static StoreSession() => ColumnTypes.Register();
+
+    internal StoreSession(Dialect dialect, DbTransaction transaction)
+    {
+        Dialect = dialect;
+        this.transaction = transaction;
+        Arrivals = new ArrivalTable(this);
+        Sightings = new SightingTable(this);
+        Recordings = new RecordingTable(this);
+        Activities = new ActivityTable(this);
+        Days = new DayTable(this);
+        Findings = new FindingTable(this);
+        Evaluations = new EvaluationTable(this);
+        Alerts = new AlertTable(this);
+        Notices = new NoticeTable(this);
+        People = new PersonStateTable(this);
+        Configurations = new ConfigurationTable(this);
+        Derived = new DerivedRows(this);
+        Audits = new AuditTable(this);
+    }
+
+    public ArrivalTable Arrivals { get; }
+
+    public SightingTable Sightings { get; }
+
+    public RecordingTable Recordings { get; }
+
+    public ActivityTable Activities { get; }
+
+    public DayTable Days { get; }
+
+    public FindingTable Findings { get; }
+
+    public EvaluationTable Evaluations { get; }
+
+    public AlertTable Alerts { get; }
+
+    public NoticeTable Notices { get; }
+
+    public PersonStateTable People { get; }
+
+    public ConfigurationTable Configurations { get; }
+
+    public DerivedRows Derived { get; }
+
+    public AuditTable Audits { get; }
+
+    internal Dialect Dialect { get; }
+
+    /// <summary>All rows, read to the end: an error in any of them is thrown here.</summary>
+    internal List<T> Rows<T>(string sql, object? values = null) => Connection.Query<T>(sql, values, transaction).AsList();
+
+    /// <summary>The only row, or null.</summary>
+    internal T? Row<T>(string sql, object? values = null)
+        where T : class =>
+        Connection.QuerySingleOrDefault<T>(sql, values, transaction);
+
+    internal T? Value<T>(string sql, object? values = null) => Connection.ExecuteScalar<T>(sql, values, transaction);
+
+    /// <summary>Number of rows changed.</summary>
+    internal int Execute(string sql, object? values = null) => Connection.Execute(sql, values, transaction);
+
+    /// <summary>Runs one prepared statement for each row.</summary>
+    internal void ExecuteEach<T>(string sql, IEnumerable<T> rows)
+        where T : class =>
+        Connection.Execute(sql, rows, transaction);
+
+    private DbConnection Connection => transaction.Connection ?? throw new InvalidOperationException("the transaction of this session is over");
+}
