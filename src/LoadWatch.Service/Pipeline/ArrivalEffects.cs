@@ -15,6 +15,11 @@ public sealed class ArrivalEffects(StoreSession session, ArrivalDecoder decoder)
     {
         if (session.Arrivals.Get(arrival.Sha) is { State: ArrivalState.Stored, Person: { } before })
         {
+            foreach (var recording in session.Recordings.OfArrival(arrival.Sha))
+            {
+                MarkDirty(recording);
+            }
+
             session.Recordings.RemoveArrival(arrival.Sha);
             touched.Add(before);
         }

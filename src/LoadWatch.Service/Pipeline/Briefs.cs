@@ -20,7 +20,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now)
     private const int RefusedDays = 7;
 
     /// <summary>Where a notice goes. Mail joins here.</summary>
-    public static IReadOnlyList<string> Channels { get; } = ["page", "notice_file"];
+    public static IReadOnlyList<string> Channels { get; } = ["page", "log"];
 
     /// <summary>Freezes every brief that is due, with its deliveries.</summary>
     /// <returns>How many were decided.</returns>
