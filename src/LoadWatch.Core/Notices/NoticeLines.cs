@@ -38,10 +38,10 @@ public static class NoticeLines
     private static int? Announced(string line, Notice notice)
     {
         var head = Head(notice) + "1/";
-        var key = line.IndexOf(KeyMark(notice), StringComparison.Ordinal);
-        return key > head.Length
+        var end = line.IndexOf(" " + KeyMark(notice), StringComparison.Ordinal);
+        return end > head.Length
             && line.StartsWith(head, StringComparison.Ordinal)
-            && int.TryParse(line.AsSpan(head.Length, key - head.Length), NumberStyles.None, CultureInfo.InvariantCulture, out var count)
+            && int.TryParse(line.AsSpan(head.Length, end - head.Length), NumberStyles.None, CultureInfo.InvariantCulture, out var count)
             && count > 0
                 ? count
                 : null;

@@ -10,8 +10,19 @@ namespace LoadWatch.Delivery.Page;
 /// </summary>
 /// <param name="Width">Of the drawing; its height is 36.</param>
 /// <param name="UsualY">Height of the line of a usual day, or null.</param>
+/// <param name="Caption">Which days they are.</param>
 /// <param name="Words">The same for a reader who hears the page.</param>
-internal sealed record Strip(int Width, string Bars, string Rests, string Unknowns, string Uncomputed, string Heavy, string HeavyUnknown, string? UsualY, string Words)
+public sealed record Strip(
+    int Width,
+    string Bars,
+    string Rests,
+    string Unknowns,
+    string Uncomputed,
+    string Heavy,
+    string HeavyUnknown,
+    string? UsualY,
+    string Caption,
+    string Words)
 {
     private const int Pitch = 6;
     private const int BarWidth = 4;
@@ -33,6 +44,7 @@ internal sealed record Strip(int Width, string Bars, string Rests, string Unknow
             Draw(days, day => day.HeavyLegs == true, (_, x) => Diamond(x, 3)),
             Draw(days, day => day.HeavyLegs is null, (_, x) => Diamond(x, 2)),
             usualDay is { } usual && top > 0 ? Number(Baseline - Height(usual, top)) : null,
+            days.Count == 0 ? "No days yet" : $"{BriefNumbers.Day(days[0].Date)} to {BriefNumbers.Day(days[^1].Date)}, load in {OneLine.Of(unit)}",
             InWords(days, unit));
     }
 
