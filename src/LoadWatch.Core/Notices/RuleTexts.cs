@@ -48,7 +48,8 @@ public static class RuleTexts
         LoadRatio => self
             ? "comparing with what you had planned: an easier day, or keeping the plan if it was meant."
             : "comparing with what was planned: an easier day, or keeping the plan if it was meant.",
-        StimulusGap => $"a few heavy or fast {RegionSets(key.Region)}, within what {(self ? "you and your" : "the person and their")} clinician allow; no catching up.",
+        StimulusGap =>
+            $"a few heavy or fast {RegionSets(key.Region)}, within what {(self ? "you and your" : "the person and their")} clinician allow; no catching up.",
         Silence => self
             ? "a look at strap, watch and upload if you did train: one of them may have failed."
             : "asking whether training went on; a strap, watch or upload may have failed.",

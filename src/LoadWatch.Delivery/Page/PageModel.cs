@@ -59,7 +59,7 @@ internal sealed record PagePerson(string Name, string Severity, IReadOnlyList<Pa
         OneLine.Of(person.Name),
         BriefText.SeverityWord(person.Severity),
         [.. person.Reasons.Select(PageReason.Of)],
-        string.Join("; ", person.Reasons.Select(reason => reason.Decides).Distinct(StringComparer.Ordinal)),
+        OneLine.Of(BriefText.WhoDecides(person)),
         strip);
 }
 

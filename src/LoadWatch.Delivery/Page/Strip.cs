@@ -44,7 +44,7 @@ public sealed record Strip(
             Draw(days, day => day.HeavyLegs == true, (_, x) => Diamond(x, 3)),
             Draw(days, day => day.HeavyLegs is null, (_, x) => Diamond(x, 2)),
             usualDay is { } usual && top > 0 ? Number(Baseline - Height(usual, top)) : null,
-            days.Count == 0 ? "No days yet" : $"{BriefNumbers.Day(days[0].Date)} to {BriefNumbers.Day(days[^1].Date)}, load in {OneLine.Of(unit)}",
+            InShort(days, unit),
             InWords(days, unit));
     }
 
@@ -73,6 +73,10 @@ public sealed record Strip(
 
     private static string Number(double value) => value.ToString("0.#", CultureInfo.InvariantCulture);
 
+    private static string InShort(IReadOnlyList<BriefDay> days, string unit) => days.Count == 0
+        ? "No days yet"
+        : $"{BriefNumbers.Day(days[0].Date)} to {BriefNumbers.Day(days[^1].Date)}, load in {OneLine.Of(unit)}";
+
     private static string InWords(IReadOnlyList<BriefDay> days, string unit)
     {
         if (days.Count == 0)
@@ -83,7 +87,7 @@ public sealed record Strip(
         var uncomputed = days.Count(day => day.Known && day.Load is null);
         var parts = new[]
         {
-            $"{days.Count} days to {BriefNumbers.Day(days[^1].Date)}: load on {days.Count(day => day.Load is > 0)}",
+            $"{(days.Count == 1 ? "1 day" : $"{days.Count} days")} to {BriefNumbers.Day(days[^1].Date)}: load on {days.Count(day => day.Load is > 0)}",
             Highest(days, unit),
             $"none on {days.Count(day => day.Load is 0)}",
             $"unknown on {days.Count(day => !day.Known)}",

@@ -23,7 +23,7 @@ public sealed class StripTests
         var strip = Strip.Of(Row(new BriefDay(First, false, null, null)), "AU");
         Assert.Equal(("", "", ""), (strip.Bars, strip.Rests, strip.Uncomputed));
         Assert.NotEqual("", strip.Unknowns);
-        Assert.Equal("1 days to 25 Feb: load on 0, none on 0, unknown on 1. Heavy or fast leg work on 0, unknown on 1.", strip.Words);
+        Assert.Equal("1 day to 25 Feb: load on 0, none on 0, unknown on 1. Heavy or fast leg work on 0, unknown on 1.", strip.Words);
     }
 
     [Fact]
