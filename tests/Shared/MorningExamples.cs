@@ -149,6 +149,6 @@ internal static class MorningExamples
         var known = past.Where(at => heavy(at) is not null).ToList();
         var last = past.Where(at => heavy(at) == true).Select(at => (int?)at).FirstOrDefault() ?? (known.Count > 0 ? known[^1] : null);
         var month = past.Take(28).Where(at => heavy(at) is not null).ToList();
-        return new RegionDay(heavy(back), null, month.Count == 0 ? null : month.Count(at => heavy(at) == true), last - back, 0, null);
+        return new RegionDay(heavy(back), null, month.Count == 0 ? null : month.Count(at => heavy(at) == true), last - back, known.Count(at => at < last), null);
     }
 }

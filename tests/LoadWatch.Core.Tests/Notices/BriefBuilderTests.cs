@@ -244,6 +244,18 @@ public sealed class BriefBuilderTests
         Assert.Equal("no heavy or fast leg work seen in 40 days on record", row.Remark);
     }
 
+    [Theory]
+    [InlineData(3, null)]
+    [InlineData(4, "leg work known on 6 of the 10 days since the last heavy or fast one")]
+    public void ACountOverManyUnknownDaysSaysSo(int unknownDays, string? expected)
+    {
+        // The last heavy day lies 10 days back; the group's limit wants 0.7 of the 10 days known.
+        var days = Trends("a", 60, _ => 80, back => back < unknownDays ? null : back == 10);
+        var row = Build(Subject("a", "Ann") with { Days = days }).Groups[0].Rows[0];
+        Assert.Equal(10, row.DaysSinceHeavyLegs);
+        Assert.Equal(expected, row.Remark);
+    }
+
     [Fact]
     public void ManyRemarksAreCounted()
     {
