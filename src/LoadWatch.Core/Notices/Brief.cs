@@ -68,7 +68,9 @@ public sealed record BriefGroup(string Id, string Name, string LoadUnit, IReadOn
 /// <param name="UsualWeekLoad">Mean week of the 21 days before.</param>
 /// <param name="Ratio">The uncoupled ratio of the two.</param>
 /// <param name="KnownDays">Days with known load among the last 7.</param>
-/// <param name="DaysSinceHeavyLegs">Days since the last heavy-or-fast day of the legs; null where unknown or where none was ever seen, which the remark says.</param>
+/// <param name="DaysSinceHeavyLegs">
+/// Days since the last heavy-or-fast day of the legs; null where unknown or where none was ever seen, which the remark says.
+/// </param>
 /// <param name="HeavyLegsDays28">Heavy-or-fast days of the legs among the last 28.</param>
 /// <param name="Recent">The last 28 days, oldest first.</param>
 /// <param name="Remark">Why a number is missing, in plain words, or null.</param>

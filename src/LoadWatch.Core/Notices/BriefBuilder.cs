@@ -95,8 +95,11 @@ public static class BriefBuilder
             .Select(group => Table(group.First().Group, group, upTo, self)),
     ];
 
-    private static BriefGroup Table(Group group, IEnumerable<BriefSubject> members, LocalDate upTo, bool self) =>
-        new(group.Id, OneLine.Of(group.Name), LoadUnits.Of(group.LoadQuantity), [.. members.Select(member => BriefRows.Of(member, upTo, self))]);
+    private static BriefGroup Table(Group group, IEnumerable<BriefSubject> members, LocalDate upTo, bool self) => new(
+        group.Id,
+        OneLine.Of(group.Name),
+        LoadUnits.Of(group.LoadQuantity),
+        [.. members.Select(member => BriefRows.Of(member, upTo, self))]);
 
     private static int Place(IReadOnlyList<string> order, string id)
     {

@@ -64,7 +64,7 @@ public static class BriefText
                 lines.Paragraph("  ", $"Consider: {reason.Consider}");
             }
 
-            lines.Paragraph("  ", $"Decides: {string.Join("; ", person.Reasons.Select(reason => reason.Decides).Distinct(StringComparer.Ordinal))}.");
+            lines.Paragraph("  ", $"Decides: {WhoDecides(person)}.");
         }
 
         if (brief.FlaggedBeyond > 0)
@@ -72,6 +72,10 @@ public static class BriefText
             lines.Paragraph("- ", Beyond(brief.FlaggedBeyond));
         }
     }
+
+    /// <summary>Everybody named as deciding over one of the person's reasons, once.</summary>
+    public static string WhoDecides(FlaggedPerson person) =>
+        string.Join("; ", person.Reasons.Select(reason => reason.Decides).Distinct(StringComparer.Ordinal));
 
     /// <summary>How the people beyond the named ones are told.</summary>
     public static string Beyond(int count) =>

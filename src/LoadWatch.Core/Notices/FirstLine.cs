@@ -50,24 +50,24 @@ internal static class FirstLine
         {
             (0, _) => null,
             (_, true) => "What you have seen before still stands.",
-            (1, _) => "1 other seen before still stands.",
-            _ => $"{seen} others seen before still stand.",
+            _ => $"What was seen before still stands for {People(seen)}.",
         };
     }
 
     /// <summary>Quiet without data is not quiet: who is not flagged and has no known day in the last 7 is counted (I-6).</summary>
     private static string? Unseen(IReadOnlyList<BriefSubject> shown, LocalDate? upTo, bool self)
     {
-        var unseen = shown.Count(subject => !subject.Alerts.Any(BriefBuilder.IsActive) && !subject.Days.Any(day => day.Load is not null && IsRecent(day.Date, upTo)));
+        var unseen = shown.Count(subject => !subject.Alerts.Any(BriefBuilder.IsActive) && !IsKnownLately(subject, upTo));
         return (unseen, self) switch
         {
             (0, _) => null,
-            (_, true) => "No day of the last week is known, though.",
-            _ => $"Of {unseen} no day of the last week is known.",
+            (_, true) => "No day of the last week is known.",
+            _ => $"{People(unseen)} without a known day in the last week.",
         };
     }
 
-    private static bool IsRecent(LocalDate date, LocalDate? upTo) => upTo is { } last && date > last.PlusDays(-7) && date <= last;
+    private static bool IsKnownLately(BriefSubject subject, LocalDate? upTo) =>
+        upTo is { } last && subject.Days.Any(day => day.Load is not null && day.Date > last.PlusDays(-7) && day.Date <= last);
 
     private static string? Questions(int count) => count switch
     {

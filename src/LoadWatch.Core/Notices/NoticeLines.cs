@@ -23,9 +23,7 @@ public static class NoticeLines
     {
         for (var at = 0; at < lines.Count; at++)
         {
-            if (Announced(lines[at], notice) is { } count
-                && count <= lines.Count - at
-                && Enumerable.Range(2, count - 1).All(place => lines[at + place - 1].StartsWith(Start(notice, place, count), StringComparison.Ordinal)))
+            if (Announced(lines[at], notice) is { } count && Follow(lines, at, count, notice))
             {
                 return true;
             }
@@ -34,20 +32,25 @@ public static class NoticeLines
         return false;
     }
 
+    private static bool Follow(IReadOnlyList<string> lines, int first, int count, Notice notice) =>
+        count <= lines.Count - first
+        && Enumerable.Range(2, count - 1).All(place => lines[first + place - 1].StartsWith(Start(notice, place, count), StringComparison.Ordinal));
+
     /// <summary>How many lines the notice has by its first line, or null for any other line.</summary>
     private static int? Announced(string line, Notice notice)
     {
         var head = Head(notice) + "1/";
-        var key = line.IndexOf(KeyMark(notice), StringComparison.Ordinal);
-        return key > head.Length
+        var end = line.IndexOf(" " + KeyMark(notice), StringComparison.Ordinal);
+        return end > head.Length
             && line.StartsWith(head, StringComparison.Ordinal)
-            && int.TryParse(line.AsSpan(head.Length, key - head.Length), NumberStyles.None, CultureInfo.InvariantCulture, out var count)
+            && int.TryParse(line.AsSpan(head.Length, end - head.Length), NumberStyles.None, CultureInfo.InvariantCulture, out var count)
             && count > 0
                 ? count
                 : null;
     }
 
-    private static string Start(Notice notice, int place, int count) => string.Create(CultureInfo.InvariantCulture, $"{Head(notice)}{place}/{count}") + " ";
+    private static string Start(Notice notice, int place, int count) =>
+        string.Create(CultureInfo.InvariantCulture, $"{Head(notice)}{place}/{count} ");
 
     private static string KeyMark(Notice notice) => $"[{OneLine.Of(notice.Key)}] ";
 
@@ -65,13 +68,15 @@ public static class NoticeLines
             }
             else
             {
-                yield return heading + (heading.Length > 0 && paragraph.StartsWith("- ", StringComparison.Ordinal) ? paragraph[2..] : paragraph);
+                var isItem = heading.Length > 0 && paragraph.StartsWith("- ", StringComparison.Ordinal);
+                yield return heading + (isItem ? paragraph[2..] : paragraph);
             }
         }
     }
 
     private static bool IsSaid(string paragraph) =>
-        !paragraph.StartsWith(BriefText.Everybody, StringComparison.Ordinal) && !paragraph.StartsWith(BriefText.HowToRead, StringComparison.Ordinal);
+        !paragraph.StartsWith(BriefText.Everybody, StringComparison.Ordinal)
+        && !paragraph.StartsWith(BriefText.HowToRead, StringComparison.Ordinal);
 
     /// <summary>A paragraph ends at an empty line, or where the next one begins with a dash or follows a heading.</summary>
     private static IEnumerable<string> Paragraphs(string text)

@@ -3,10 +3,14 @@ using System.Text;
 
 namespace LoadWatch.Notices;
 
-/// <summary>Makes a name or sentence from outside safe for one line of text: nothing in it can start a new line, turn the reading direction or control a terminal.</summary>
+/// <summary>
+/// Makes a name or sentence from outside safe for one line of text: nothing in it can start a new line, turn the reading direction or control a terminal.
+/// </summary>
 public static class OneLine
 {
-    /// <summary>Controls, line breaks and direction marks become a space, runs of space one space; the ends are trimmed, halves of a surrogate pair replaced.</summary>
+    /// <summary>
+    /// Controls, line breaks and direction marks become a space, runs of space one space; the ends are trimmed, halves of a surrogate pair replaced.
+    /// </summary>
     public static string Of(string text)
     {
         var line = new StringBuilder(text.Length);
@@ -49,5 +53,6 @@ public static class OneLine
         || Rune.GetUnicodeCategory(rune) is UnicodeCategory.Control or UnicodeCategory.LineSeparator or UnicodeCategory.ParagraphSeparator
         || TurnsDirection(rune.Value);
 
-    private static bool TurnsDirection(int code) => code is 0x061C or 0x200E or 0x200F or (>= 0x202A and <= 0x202E) or (>= 0x2066 and <= 0x2069) or 0xFEFF;
+    private static bool TurnsDirection(int code) =>
+        code is 0x061C or 0x200E or 0x200F or (>= 0x202A and <= 0x202E) or (>= 0x2066 and <= 0x2069) or 0xFEFF;
 }

@@ -9,7 +9,7 @@ public static class ReadingNotes
             + "The week is the last 7 days, scaled up when a day or two of it are unknown."),
         new("Usual", "the mean week of the 21 days before those 7. \u201CTimes usual\u201D is the week divided by it."),
         new("Heavy-or-fast leg day", "a day with enough hard work of the legs (heavy sets, sprints, efforts well above a steady hard pace) to call on "
-            + "the large, fast motor units. Estimated, never measured."),
+            + "the large, fast motor units. Estimated, never measured. \u201CLegs\u201D counts the days since the last one."),
         new("Known days", "days of the last 7 whose load is known. A rest day is known."),
         new("Unknown", "nothing came in, or it could not be computed. It is never counted as nought, and alone it raises or clears "
             + "nothing but the line about missing recordings."),

@@ -42,17 +42,18 @@ public static class RuleTexts
         _ => Words(key.Rule),
     };
 
+    /// <summary>After the word "Consider".</summary>
     public static string Consider(FindingKey key, bool self) => key.Rule switch
     {
         LoadRatio => self
-            ? "Compare with what you had planned; consider an easier day, or keep the plan if it was meant."
-            : "Compare with what was planned; consider an easier day, or keep the plan if it was meant.",
+            ? "comparing with what you had planned: an easier day, or keeping the plan if it was meant."
+            : "comparing with what was planned: an easier day, or keeping the plan if it was meant.",
         StimulusGap =>
-            $"Consider a few heavy or fast {RegionSets(key.Region)}, within what {(self ? "you and your" : "the person and their")} clinician allow; no catching up.",
+            $"a few heavy or fast {RegionSets(key.Region)}, within what {(self ? "you and your" : "the person and their")} clinician allow; no catching up.",
         Silence => self
-            ? "If you trained, look at the strap, the watch and the upload: one of them may have failed."
-            : "Ask whether training went on; a strap, watch or upload may have failed.",
-        _ => "Look at the numbers behind it before changing anything.",
+            ? "a look at strap, watch and upload if you did train: one of them may have failed."
+            : "asking whether training went on; a strap, watch or upload may have failed.",
+        _ => "a look at the numbers behind it before changing anything.",
     };
 
     /// <summary>Who decides, as the reader of this role is told.</summary>

@@ -4,7 +4,9 @@ using LoadWatch.Notices;
 
 namespace LoadWatch.Delivery.Log;
 
-/// <summary>Notices as lines of one file a month, <c>notices-2026-03.txt</c>. It only grows; a notice that it holds whole is not written again.</summary>
+/// <summary>
+/// Notices as lines of one file a month, <c>notices-2026-03.txt</c>. It only grows; a notice that it holds whole is not written again.
+/// </summary>
 public sealed class NoticeFile(string folder) : INoticeChannel
 {
     public string Name => "log";

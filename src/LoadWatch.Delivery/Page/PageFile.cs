@@ -38,7 +38,8 @@ public sealed class PageFile(string folder) : INoticeChannel
         : NoFileName;
 
     private static ChannelOutcome NoFileName => ChannelOutcome.Failed(
-        $"the contact's id cannot name a file: up to {NameAtMost} of the letters a to z, digits, dash, underscore and dot, beginning with a letter or digit");
+        $"the contact's id cannot name a file: up to {NameAtMost} of the letters a to z, digits, dash, underscore and dot, "
+        + "beginning with a letter or digit");
 
     private static string DatedName(string contactId, LocalDate date) => $"{contactId}-{LocalDatePattern.Iso.Format(date)}.html";
 

@@ -8,7 +8,8 @@ internal sealed record PageModel(
     string Date,
     string? DataUpTo,
     string Contact,
-    string FirstLine,
+    string Headline,
+    string? Lead,
     IReadOnlyList<PagePerson> Flagged,
     string? Beyond,
     IReadOnlyList<BriefLine> Returned,
@@ -23,18 +24,29 @@ internal sealed record PageModel(
             .SelectMany(group => group.Rows.Select(row => (Group: group, Row: row)))
             .DistinctBy(pair => pair.Row.PersonId, StringComparer.Ordinal)
             .ToDictionary(pair => pair.Row.PersonId, StringComparer.Ordinal);
+        var (headline, lead) = Split(OneLine.Of(brief.FirstLine));
         return new PageModel(
             BriefText.DateInWords(brief.Date),
             brief.DataUpTo is { } upTo ? BriefText.DateInWords(upTo) : null,
             OneLine.Of(brief.ContactName),
-            OneLine.Of(brief.FirstLine),
-            [.. brief.Flagged.Select(person => PagePerson.Of(person, rows.TryGetValue(person.PersonId, out var at) ? Strip.Of(at.Row, at.Group.LoadUnit) : null))],
+            headline,
+            lead,
+            [.. brief.Flagged.Select(person => PagePerson.Of(person, StripOf(person.PersonId)))],
             brief.FlaggedBeyond > 0 ? BriefText.Beyond(brief.FlaggedBeyond) : null,
             [.. brief.Returned.Select(Clean)],
             [.. brief.Questions.Select(Clean)],
             [.. brief.Groups.Select(PageGroup.Of)],
             ReadingNotes.Terms,
             ReadingNotes.Cautions);
+
+        Strip? StripOf(string person) => rows.TryGetValue(person, out var at) ? Strip.Of(at.Row, at.Group.LoadUnit) : null;
+    }
+
+    /// <summary>The first sentence stands large, the others below it.</summary>
+    private static (string Headline, string? Lead) Split(string firstLine)
+    {
+        var end = firstLine.IndexOf(". ", StringComparison.Ordinal);
+        return end < 0 ? (firstLine, null) : (firstLine[..(end + 1)], firstLine[(end + 2)..]);
     }
 
     private static BriefLine Clean(BriefLine line) => new(OneLine.Of(line.Subject), OneLine.Sentence(line.Sentence));
@@ -47,7 +59,7 @@ internal sealed record PagePerson(string Name, string Severity, IReadOnlyList<Pa
         OneLine.Of(person.Name),
         BriefText.SeverityWord(person.Severity),
         [.. person.Reasons.Select(PageReason.Of)],
-        string.Join("; ", person.Reasons.Select(reason => reason.Decides).Distinct(StringComparer.Ordinal)),
+        OneLine.Of(BriefText.WhoDecides(person)),
         strip);
 }
 

@@ -10,8 +10,19 @@ namespace LoadWatch.Delivery.Page;
 /// </summary>
 /// <param name="Width">Of the drawing; its height is 36.</param>
 /// <param name="UsualY">Height of the line of a usual day, or null.</param>
+/// <param name="Caption">Which days they are.</param>
 /// <param name="Words">The same for a reader who hears the page.</param>
-internal sealed record Strip(int Width, string Bars, string Rests, string Unknowns, string Uncomputed, string Heavy, string HeavyUnknown, string? UsualY, string Words)
+public sealed record Strip(
+    int Width,
+    string Bars,
+    string Rests,
+    string Unknowns,
+    string Uncomputed,
+    string Heavy,
+    string HeavyUnknown,
+    string? UsualY,
+    string Caption,
+    string Words)
 {
     private const int Pitch = 6;
     private const int BarWidth = 4;
@@ -33,6 +44,7 @@ internal sealed record Strip(int Width, string Bars, string Rests, string Unknow
             Draw(days, day => day.HeavyLegs == true, (_, x) => Diamond(x, 3)),
             Draw(days, day => day.HeavyLegs is null, (_, x) => Diamond(x, 2)),
             usualDay is { } usual && top > 0 ? Number(Baseline - Height(usual, top)) : null,
+            InShort(days, unit),
             InWords(days, unit));
     }
 
@@ -61,6 +73,10 @@ internal sealed record Strip(int Width, string Bars, string Rests, string Unknow
 
     private static string Number(double value) => value.ToString("0.#", CultureInfo.InvariantCulture);
 
+    private static string InShort(IReadOnlyList<BriefDay> days, string unit) => days.Count == 0
+        ? "No days yet"
+        : $"{BriefNumbers.Day(days[0].Date)} to {BriefNumbers.Day(days[^1].Date)}, load in {OneLine.Of(unit)}";
+
     private static string InWords(IReadOnlyList<BriefDay> days, string unit)
     {
         if (days.Count == 0)
@@ -71,7 +87,7 @@ internal sealed record Strip(int Width, string Bars, string Rests, string Unknow
         var uncomputed = days.Count(day => day.Known && day.Load is null);
         var parts = new[]
         {
-            $"{days.Count} days to {BriefNumbers.Day(days[^1].Date)}: load on {days.Count(day => day.Load is > 0)}",
+            $"{(days.Count == 1 ? "1 day" : $"{days.Count} days")} to {BriefNumbers.Day(days[^1].Date)}: load on {days.Count(day => day.Load is > 0)}",
             Highest(days, unit),
             $"none on {days.Count(day => day.Load is 0)}",
             $"unknown on {days.Count(day => !day.Known)}",

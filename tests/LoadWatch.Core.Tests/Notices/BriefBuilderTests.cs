@@ -1,0 +1,275 @@
+using LoadWatch.Alerts;
+using LoadWatch.Days;
+using LoadWatch.Findings;
+using LoadWatch.Notices;
+using LoadWatch.People;
+using LoadWatch.Stimulus;
+using NodaTime;
+using static LoadWatch.Tests.MorningExamples;
+
+namespace LoadWatch.Tests.Notices;
+
+public sealed class BriefBuilderTests
+{
+    [Fact]
+    public void ThePeopleToLookAtAreCountedByTheGravestReasonInTheFirstLine()
+    {
+        var brief = Build(
+            Subject("a", "Ann", LoadRatio("a"), StimulusGap("a")),
+            Subject("b", "Ben", StimulusGap("b")),
+            Subject("c", "Cas", Silence("c")),
+            Subject("d", "Dot"));
+        Assert.Equal("3 of 4 to look at: 1 well above their usual, 1 without heavy or fast leg work, 1 silent.", brief.FirstLine);
+    }
+
+    [Fact]
+    public void NothingToActOnIsSaidPlainly()
+    {
+        Assert.Equal("All quiet: 41 people, nothing to act on.", Build([.. Enumerable.Range(1, 41).Select(n => Subject($"p{n}", $"P {n}"))]).FirstLine);
+        Assert.Equal("All quiet: 1 person, nothing to act on.", Build(Subject("a", "Ann")).FirstLine);
+        Assert.Equal("Nobody is in this brief yet.", Build().FirstLine);
+    }
+
+    [Theory]
+    [InlineData(1, "All quiet: 1 person, nothing to act on. 1 file needs an answer.")]
+    [InlineData(2, "All quiet: 1 person, nothing to act on. 2 files need an answer.")]
+    public void FilesThatNeedAnAnswerAreMentioned(int files, string expected)
+    {
+        var questions = Enumerable.Range(1, files).Select(n => new BriefLine($"{n}.fit", "nobody is named as its owner")).ToList();
+        Assert.Equal(expected, BriefBuilder.Build(Contact(ContactRole.Coach), Today, [Subject("a", "Ann")], questions).FirstLine);
+    }
+
+    [Fact]
+    public void QuietWithoutDataIsNotCalledQuietAlone()
+    {
+        var unknown = Subject("b", "Ben") with { Days = Trends("b", 60, back => back < 7 ? null : 80, _ => null) };
+        Assert.Equal("All quiet: 2 people, nothing to act on. 1 person without a known day in the last week.", Build(Subject("a", "Ann"), unknown).FirstLine);
+    }
+
+    [Fact]
+    public void TheFirstLineHoldsNoName()
+    {
+        var brief = SquadBrief();
+        Assert.All(brief.Groups[0].Rows, row => Assert.DoesNotContain(row.Name.Split(' ')[^1], brief.FirstLine, StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void TenPeopleAreNamedAndTheRestIsCounted()
+    {
+        var brief = Build([.. Enumerable.Range(1, 13).Select(n => Subject($"p{n:00}", $"P {n:00}", Silence($"p{n:00}")))]);
+        Assert.Equal(10, brief.Flagged.Count);
+        Assert.Equal(3, brief.FlaggedBeyond);
+        Assert.StartsWith("13 of 13 to look at", brief.FirstLine, StringComparison.Ordinal);
+        Assert.Equal(13, brief.Groups[0].Rows.Count(row => row.Flagged));
+    }
+
+    [Fact]
+    public void WarningsComeFirstThenNamesWithoutRegardToCase()
+    {
+        var brief = Build(
+            Subject("1", "zoe", Silence("1")),
+            Subject("2", "Yan", LoadRatio("2")),
+            Subject("3", "adam", Silence("3")),
+            Subject("4", "Bea", Silence("4")),
+            Subject("5", "vic", LoadRatio("5")));
+        Assert.Equal(["vic", "Yan", "adam", "Bea", "zoe"], brief.Flagged.Select(person => person.Name));
+        Assert.Equal(["adam", "Bea", "vic", "Yan", "zoe"], brief.Groups[0].Rows.Select(row => row.Name));
+    }
+
+    [Fact]
+    public void TheOrderOfTheSubjectsDoesNotMatter()
+    {
+        BriefSubject[] subjects = [Subject("a", "Ann", Silence("a")), Subject("b", "Ben", LoadRatio("b")), Subject("c", "Cas", StimulusGap("c"))];
+        Assert.Equal(BriefText.Write(Build(subjects)), BriefText.Write(Build([.. subjects.Reverse()])));
+    }
+
+    [Fact]
+    public void APersonWithSeveralAlertsStandsThereOnce()
+    {
+        var brief = Build(Subject("a", "Ann", StimulusGap("a"), Silence("a"), LoadRatio("a")));
+        var person = Assert.Single(brief.Flagged);
+        Assert.Equal(["load_ratio", "stimulus_gap", "silence"], person.Reasons.Select(reason => reason.Rule));
+        Assert.Equal(Severity.Warning, person.Severity);
+        Assert.Equal([true, false, false], person.Reasons.Select(reason => reason.IsNew));
+    }
+
+    [Fact]
+    public void APersonGivenTwiceStandsThereOnce()
+    {
+        var brief = Build(Subject("ann", "Ann", Silence("ann")), Subject("ANN", "Ann", Silence("ANN")));
+        Assert.Single(brief.Flagged);
+        Assert.Single(brief.Groups[0].Rows);
+    }
+
+    [Fact]
+    public void WhatSomebodyAcknowledgedIsNotAskedForAgainButStaysVisible()
+    {
+        var brief = Build(Subject("a", "Ann", StimulusGap("a", state: AlertState.Acknowledged)));
+        Assert.Empty(brief.Flagged);
+        Assert.Equal("All quiet: 1 person, nothing to act on. What was seen before still stands for 1 person.", brief.FirstLine);
+        Assert.Equal("seen before and still standing: no heavy or fast leg work lately", brief.Groups[0].Rows[0].Remark);
+    }
+
+    [Fact]
+    public void AnAcknowledgedAlertStandsBesideANewOne()
+    {
+        var brief = Build(Subject("a", "Ann", StimulusGap("a", state: AlertState.Acknowledged), LoadRatio("a")));
+        Assert.Equal([false, true], Assert.Single(brief.Flagged).Reasons.Select(reason => reason.IsSeen));
+    }
+
+    [Fact]
+    public void ReturnedAlertsAreLinesThatSayHow()
+    {
+        var brief = Build(
+            Subject("a", "Ann", Over(LoadRatio("a"))),
+            Subject("b", "Ben", Over(LoadRatio("b"), corrected: true)),
+            Subject("c", "Cas", Over(StimulusGap("c"))),
+            Subject("d", "Dot", Over(Silence("d"))));
+        Assert.Equal(
+            [
+                new BriefLine("Ann", "Load is back within 1.6 times the usual week."),
+                new BriefLine("Ben", "Load well above the usual: corrected by a later file."),
+                new BriefLine("Cas", "Heavy or fast leg work is back."),
+                new BriefLine("Dot", "Recordings are coming in again."),
+            ],
+            brief.Returned);
+        Assert.Empty(brief.Flagged);
+    }
+
+    [Fact]
+    public void TheReturnValueIsTheGroupsOwn()
+    {
+        var strict = Squad with { Limits = new RuleLimits { LoadRatio = new LoadRatioLimits { Return = 1.45 } } };
+        var brief = Build(Subject("a", "Ann", Over(LoadRatio("a"))) with { Group = strict });
+        Assert.Equal("Load is back within 1.45 times the usual week.", Assert.Single(brief.Returned).Sentence);
+    }
+
+    [Fact]
+    public void AnAlertThatReturnedBeforeTheLastBriefIsNotToldAgain()
+    {
+        var old = Over(LoadRatio("a")) with { ReturnedSince = false };
+        Assert.Empty(Build(Subject("a", "Ann", old)).Returned);
+    }
+
+    [Fact]
+    public void SomebodyWhoWatchesThemselvesIsCalledYou()
+    {
+        var brief = BriefBuilder.Build(Oneself("a"), Today, [Subject("a", "Ann", LoadRatio("a"), StimulusGap("a"))], []);
+        Assert.Equal("To look at: load well above your usual; no heavy or fast leg work lately.", brief.FirstLine);
+        Assert.Equal("You", Assert.Single(brief.Flagged).Name);
+        Assert.Equal("you, with your clinician where one looks after you", brief.Flagged[0].Reasons[0].Decides);
+        Assert.Contains("what you had planned", brief.Flagged[0].Reasons[0].Consider, StringComparison.Ordinal);
+        Assert.Contains("you and your clinician allow", brief.Flagged[0].Reasons[1].Consider, StringComparison.Ordinal);
+        Assert.DoesNotContain("Ann", BriefText.Write(brief), StringComparison.Ordinal);
+        Assert.Equal("All quiet: nothing to act on.", BriefBuilder.Build(Oneself("a"), Today, [Subject("a", "Ann")], []).FirstLine);
+    }
+
+    [Theory]
+    [InlineData(ContactRole.Coach, "you and the person")]
+    [InlineData(ContactRole.Physiotherapist, "the person and their coach, with what you know")]
+    [InlineData(ContactRole.Clinician, "the person, with you")]
+    [InlineData(ContactRole.FrontDesk, "the person and their coach or clinician; please pass it on")]
+    public void WhoDecidesDependsOnTheReader(ContactRole role, string expected)
+    {
+        var brief = BriefBuilder.Build(Contact(role), Today, [Subject("a", "Ann", Silence("a"))], []);
+        Assert.Equal(expected, brief.Flagged[0].Reasons[0].Decides);
+    }
+
+    [Fact]
+    public void PeopleOutsideTheContactsGroupsAreLeftOut()
+    {
+        var elsewhere = new BriefSubject(Person("z", "Zed", Class), Class, QuietDays("z", 60), [Silence("z")], []);
+        var brief = Build(Subject("a", "Ann"), elsewhere);
+        Assert.Equal("All quiet: 1 person, nothing to act on.", brief.FirstLine);
+        Assert.Equal(["squad"], brief.Groups.Select(group => group.Id));
+        var self = BriefBuilder.Build(Oneself("A"), Today, [Subject("a", "Ann"), Subject("b", "Ben", Silence("b"))], []);
+        Assert.Empty(self.Flagged);
+        Assert.Equal("a", Assert.Single(Assert.Single(self.Groups).Rows).PersonId);
+    }
+
+    [Fact]
+    public void GroupsComeInTheContactsOrder()
+    {
+        var other = new BriefSubject(Person("z", "Zed", Class), Class, QuietDays("z", 60), [], []);
+        var brief = BriefBuilder.Build(Contact(ContactRole.Coach, "ada", "squad", "class"), Today, [other, Subject("a", "Ann")], []);
+        Assert.Equal([("squad", "AU"), ("class", "kg")], brief.Groups.Select(group => (group.Id, group.LoadUnit)));
+    }
+
+    [Fact]
+    public void ARowShowsTheEvaluationDatesNumbers()
+    {
+        // 3 training days of 80 and a rest day in turn, yesterday 80: the last 7 days hold one rest day (back 3), so 6 x 80 = 480; the 21 before hold 15 or 16.
+        // Rest days lie 3, 7, 11, 15, 19, 23, 27 days back: 6 of them in days 7 to 27, so 15 x 80 = 1200 in 3 weeks = 400 a week; 480 / 400 = 1.2.
+        var row = Build(Subject("a", "Ann")).Groups[0].Rows[0];
+        Assert.Equal(480, row.WeekLoad!.Value, 9);
+        Assert.Equal(400, row.UsualWeekLoad!.Value, 9);
+        Assert.Equal(1.2, row.Ratio!.Value, 9);
+        Assert.Equal(7, row.KnownDays);
+        Assert.Equal(1, row.DaysSinceHeavyLegs);
+        Assert.Equal(7, row.HeavyLegsDays28);
+        Assert.Equal(Yesterday, row.LastRecorded);
+        Assert.Equal(28, row.Recent.Count);
+        Assert.Equal((new LocalDate(2026, 2, 1), Yesterday), (row.Recent[0].Date, row.Recent[^1].Date));
+        Assert.Equal(new BriefDay(new LocalDate(2026, 2, 25), true, 0, false), row.Recent[^4]);
+        Assert.Null(row.Remark);
+    }
+
+    [Fact]
+    public void UnknownDaysStayUnknown()
+    {
+        var row = Build(Subject("a", "Ann") with { Days = Trends("a", 60, back => back < 3 ? null : 80, back => back < 3 ? null : false) }).Groups[0].Rows[0];
+        Assert.Equal(4, row.KnownDays);
+        Assert.Null(row.WeekLoad);
+        Assert.Null(row.Ratio);
+        Assert.All(row.Recent.TakeLast(3), day => Assert.Equal((false, null, null), (day.Known, day.Load, day.HeavyLegs)));
+        Assert.StartsWith("load known on 4 of the last 7 days, 5 wanted", row.Remark, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void APersonWithoutAnyDayHasARowOfUnknowns()
+    {
+        var row = Build(Subject("a", "Ann"), Subject("b", "Ben") with { Days = [] }).Groups[0].Rows[1];
+        Assert.Equal((null, null, null, 0, null, null), (row.WeekLoad, row.UsualWeekLoad, row.Ratio, row.KnownDays, row.DaysSinceHeavyLegs, row.HeavyLegsDays28));
+        Assert.Null(row.LastRecorded);
+        Assert.Equal(28, row.Recent.Count(day => !day.Known));
+        Assert.Equal("nothing recorded yet", row.Remark);
+    }
+
+    [Fact]
+    public void DaysSinceTheFirstKnownDayAreNotShownAsDaysSinceLegWork()
+    {
+        var row = Build(Subject("a", "Ann") with { Days = Trends("a", 40, _ => 80, _ => false) }).Groups[0].Rows[0];
+        Assert.Null(row.DaysSinceHeavyLegs);
+        Assert.Equal(0, row.HeavyLegsDays28);
+        Assert.Equal("no heavy or fast leg work seen in 40 days on record", row.Remark);
+    }
+
+    [Theory]
+    [InlineData(3, null)]
+    [InlineData(4, "leg work known on 6 of the 10 days since the last heavy or fast one")]
+    public void ACountOverManyUnknownDaysSaysSo(int unknownDays, string? expected)
+    {
+        // The last heavy day lies 10 days back; the group's limit wants 0.7 of the 10 days known.
+        var days = Trends("a", 60, _ => 80, back => back < unknownDays ? null : back == 10);
+        var row = Build(Subject("a", "Ann") with { Days = days }).Groups[0].Rows[0];
+        Assert.Equal(10, row.DaysSinceHeavyLegs);
+        Assert.Equal(expected, row.Remark);
+    }
+
+    [Fact]
+    public void ManyRemarksAreCounted()
+    {
+        var row = Build(Subject("a", "Ann") with { Remarks = ["one", "two", "two", "three", "four"] }).Groups[0].Rows[0];
+        Assert.Equal("one; two; 2 more of the kind", row.Remark);
+    }
+
+    [Fact]
+    public void ARuleWithoutATextOfItsOwnIsStillTold()
+    {
+        var brief = Build(Subject("a", "Ann", News("a", "weekly_jump", null, Severity.Notice, AlertState.Unacknowledged, "this week is 52 % above the last", true)));
+        Assert.Equal("1 of 1 to look at: 1 with weekly jump.", brief.FirstLine);
+        Assert.Equal("This week is 52 % above the last.", brief.Flagged[0].Reasons[0].Sentence);
+    }
+
+    private static Brief Build(params BriefSubject[] subjects) => BriefBuilder.Build(Contact(ContactRole.Coach), Today, subjects, []);
+}
