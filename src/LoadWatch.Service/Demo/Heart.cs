@@ -10,7 +10,7 @@ internal sealed class Heart(double restBpm, double maxBpm, DemoRandom random)
     private const double LagSeconds = 30;
     private const double DriftPerHour = 0.05;
 
-    private readonly double form = 0.015 * random.Normal();
+    private readonly double form = 0.008 * random.Normal();
     private double reached = 0.2;
     private double wander;
     private double seconds;

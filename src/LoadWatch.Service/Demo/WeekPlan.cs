@@ -48,7 +48,7 @@ public sealed record WeekPlan(double LengthDeviation, IReadOnlyList<WeekSlot> Sl
         new(Saturday, Forenoon, SessionKind.Row, 52),
     ]);
 
-    public static WeekPlan ThreeDays { get; } = new(0.08,
+    public static WeekPlan ThreeDays { get; } = new(0.06,
     [
         new(Monday, Morning, SessionKind.Row, 45),
         new(Wednesday, Morning, SessionKind.RowIntervals, 30),
@@ -56,14 +56,14 @@ public sealed record WeekPlan(double LengthDeviation, IReadOnlyList<WeekSlot> Sl
         new(Friday, Afternoon, SessionKind.Gym, 40),
     ]);
 
-    public static WeekPlan ThreeClasses { get; } = new(0.07,
+    public static WeekPlan ThreeClasses { get; } = new(0.05,
     [
         new(Monday, Forenoon, SessionKind.ClassAll, 45),
         new(Wednesday, Forenoon, SessionKind.ClassAll, 45),
         new(Friday, Forenoon, SessionKind.ClassAll, 45),
     ]);
 
-    public static WeekPlan TwoClasses { get; } = new(0.07,
+    public static WeekPlan TwoClasses { get; } = new(0.05,
     [
         new(Tuesday, Forenoon, SessionKind.ClassAll, 50),
         new(Friday, Forenoon, SessionKind.ClassAll, 50),
