@@ -57,7 +57,7 @@ public class DayStateTests
     [Fact]
     public void TheOrdinallySmallestSourceIsNamed()
     {
-        var days = Build(6, Activity(0, source: "watch"), Activity(4, source: "watch"), Activity(6, source: "bike"));
+        var days = Build(6, Activity(0, source: "watch"), Activity(1, source: "bike"), Activity(4, source: "watch"), Activity(6, source: "bike"));
 
         Assert.Equal("inferred from bike", days[2].StateSource);
         Assert.Equal("inferred from bike", days[5].StateSource);
@@ -67,10 +67,19 @@ public class DayStateTests
     [Fact]
     public void EachDeviceSpeaksForSevenDaysOnly()
     {
-        var days = Build(12, Activity(0, source: "bike"), Activity(3, source: "watch"), Activity(12, source: "bike"));
+        var days = Build(12, Activity(0, source: "bike"), Activity(0, source: "watch"), Activity(3, source: "watch"), Activity(12, source: "bike"));
 
         Assert.Equal("inferred from watch", days[2].StateSource);
         Assert.Equal(DayState.Unknown, days[4].State);
         Assert.Equal("inferred from bike", days[5].StateSource);
+    }
+
+    [Fact]
+    public void ANewDeviceSaysNothingAboutTheTimeBeforeItsFirstRecording()
+    {
+        var days = Build(9, Activity(0, source: "old watch"), Activity(6, source: "new watch"), Activity(9, source: "new watch"));
+
+        Assert.All(days.Skip(1).Take(5), day => Assert.Equal(DayState.Unknown, day.State));
+        Assert.Equal("inferred from new watch", days[7].StateSource);
     }
 }
