@@ -34,17 +34,23 @@ public static class ExternalLoads
     public static double WorkKilojoules(UsableChannel power) =>
         Significant.Round(power.Samples.Sum(sample => sample.Value * sample.Milliseconds) / 1e6);
 
-    /// <summary>The largest reading, metres. It is a running total, so a part of the readings is enough, and no usable share is
-    /// asked.</summary>
+    /// <summary>
+    /// What the session states, else the largest reading less the smallest, metres: readings are a running total, which in a file of several sessions
+    /// runs through all of them. A part of the readings is enough, so no usable share is asked.
+    /// </summary>
     private static double? DistanceMetres(UsableRecording usable)
     {
+        if (usable.Recording.DistanceMetres is { } stated and > 0 && double.IsFinite(stated))
+        {
+            return Significant.Round(stated);
+        }
+
         if (!usable.Channels.TryGetValue(Channel.Distance, out var distance) || distance.Samples.Count == 0)
         {
             return null;
         }
 
-        var largest = distance.Samples.Max(sample => sample.Value);
-        return largest >= 0 ? Significant.Round(largest) : null;
+        return Significant.Round(distance.Samples.Max(sample => sample.Value) - distance.Samples.Min(sample => sample.Value));
     }
 
     private static double? Time(double? seconds) => seconds is { } known && double.IsFinite(known) && known >= 0 ? known : null;

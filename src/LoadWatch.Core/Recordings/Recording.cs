@@ -22,6 +22,9 @@ public sealed record Recording
     /// <summary>Time in seconds during which the timer ran, as the session states it, or null.</summary>
     public double? TimerSeconds { get; init; }
 
+    /// <summary>Distance of the session in metres as the session states it, or null.</summary>
+    public double? DistanceMetres { get; init; }
+
     public SampleSeries Samples { get; init; } = SampleSeries.Empty;
 
     /// <summary>Beats delivered in messages of their own (chest straps under water), in time order; not merged into the samples.</summary>

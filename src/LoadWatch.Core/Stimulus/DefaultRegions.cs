@@ -44,7 +44,7 @@ public static class DefaultRegions
             ["total_body"] = Whole,
         };
 
-    /// <summary>By sport name.</summary>
+    /// <summary>By sport name, or by <c>name/detail</c>, which goes first.</summary>
     public static IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> Sports { get; } =
         new Dictionary<string, IReadOnlyList<BodyRegion>>(StringComparer.Ordinal)
         {
@@ -55,6 +55,11 @@ public static class DefaultRegions
             ["hiking"] = Legs,
             ["rowing"] = Whole,
             ["cross_country_skiing"] = Whole,
+            ["fitness_equipment/indoor_rowing"] = Whole,
+            ["fitness_equipment/indoor_cycling"] = Legs,
+            ["fitness_equipment/stair_climbing"] = Legs,
+            ["fitness_equipment/elliptical"] = Legs,
+            ["fitness_equipment/treadmill"] = Legs,
             ["swimming"] = [BodyRegion.Arms, BodyRegion.Trunk],
         };
 }

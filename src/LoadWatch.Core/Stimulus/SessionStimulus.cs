@@ -15,6 +15,9 @@ namespace LoadWatch.Stimulus;
 /// <param name="Remarks">In plain words.</param>
 public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IReadOnlyList<string> Remarks)
 {
+    /// <summary>On foot, power is a watch's model of speed and slope: a critical power from a bicycle or an ergometer does not belong to it.</summary>
+    private static readonly string[] ModelledPower = ["running", "walking", "hiking"];
+
     private const string NoChannel =
         "nothing to read it from: power with critical_power, or heart rate with heart_rate_rest and heart_rate_max";
 
@@ -34,13 +37,13 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
         AnchorBook anchors,
         IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> sports)
     {
-        var sport = usable.Recording.Sport.Name;
-        if (!sports.TryGetValue(sport, out var regions))
+        var sport = usable.Recording.Sport;
+        if (!sports.TryGetValue(sport.ToString(), out var regions) && !sports.TryGetValue(sport.Name, out regions))
         {
             return new SessionStimulus([], [$"sport {sport} names no body region: no stimulus from its channels"]);
         }
 
-        var capacity = PowerCapacity.On(date, person.Id, anchors);
+        var capacity = ModelledPower.Contains(sport.Name) ? null : PowerCapacity.On(date, person.Id, anchors);
         var notSeen = NotRead(usable, capacity).ToList();
         var estimate = Best(usable, capacity, date, person, anchors);
         return new SessionStimulus([.. regions.Distinct().Order().Select(region => estimate.For(region, notSeen))], []);
@@ -65,7 +68,9 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
         {
             if (capacity is null)
             {
-                yield return "power: no critical_power to read it against";
+                yield return ModelledPower.Contains(usable.Recording.Sport.Name)
+                    ? "power on foot is a model of the watch and is not read"
+                    : "power: no critical_power to read it against";
             }
         }
         else if (usable.Channels.ContainsKey(Channel.Power))

@@ -50,6 +50,7 @@ internal static class FitFields
         public const byte SubSport = 6;
         public const byte ElapsedMilliseconds = 7;
         public const byte TimerMilliseconds = 8;
+        public const byte DistanceCentimetres = 9;
     }
 
     /// <summary>Laps and lengths carry their start under the same number.</summary>

@@ -124,7 +124,8 @@ internal sealed class PartContent(MemoryBudget budget)
             message.Time(FitFields.Session.Start),
             SportOf(message, FitFields.Session.Sport, FitFields.Session.SubSport),
             message.Number(FitFields.Session.ElapsedMilliseconds) / 1000,
-            message.Number(FitFields.Session.TimerMilliseconds) / 1000),
+            message.Number(FitFields.Session.TimerMilliseconds) / 1000,
+            message.Number(FitFields.Session.DistanceCentimetres) / 100),
         SessionCost);
 
     private void ReadSet(in FitMessage message)
@@ -153,4 +154,4 @@ internal sealed class PartContent(MemoryBudget budget)
 }
 
 /// <summary>What a session message states; null where it does not.</summary>
-internal sealed record SessionFacts(long? Start, Sport Sport, double? ElapsedSeconds, double? TimerSeconds);
+internal sealed record SessionFacts(long? Start, Sport Sport, double? ElapsedSeconds, double? TimerSeconds, double? DistanceMetres);

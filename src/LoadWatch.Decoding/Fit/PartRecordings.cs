@@ -15,7 +15,7 @@ internal sealed class PartRecordings
         this.content = content;
         sessions = content.Sessions.Count > 0
             ? content.Sessions
-            : [new SessionFacts(null, content.StatedSport ?? Sport.Generic, null, null)];
+            : [new SessionFacts(null, content.StatedSport ?? Sport.Generic, null, null, null)];
         owners = new SessionOwners(sessions);
     }
 
@@ -50,6 +50,7 @@ internal sealed class PartRecordings
         LocalOffset = content.LocalOffsetSeconds is { } seconds ? Offset.FromSeconds(seconds) : null,
         ElapsedSeconds = session.ElapsedSeconds ?? (samples.Last - samples.First)?.TotalSeconds,
         TimerSeconds = session.TimerSeconds,
+        DistanceMetres = session.DistanceMetres,
         Samples = samples,
         Device = content.Device,
     };

@@ -2,7 +2,6 @@ using System.CommandLine;
 using LoadWatch.Alerts;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
-using Spectre.Console;
 
 namespace LoadWatch.Service.Commands;
 
@@ -44,19 +43,14 @@ public static class AlertsCommand
             return;
         }
 
-        var table = new Table().AddColumns("person", "severity", "state", "raised", "what", "id");
         foreach (var alert in alerts)
         {
-            table.AddRow(
-                Markup.Escape(configuration.People[alert.Key.Person].Name),
-                Words.Of(alert.Severity),
-                Words.Of(alert.State),
-                Words.Date(alert.Raised),
-                Markup.Escape(alert.Text),
-                Markup.Escape(alert.Id));
+            Console.Out.WriteLine(
+                $"{configuration.People[alert.Key.Person].Name}: {Words.Of(alert.Severity)}, {Words.Of(alert.State)}, raised {Words.Date(alert.Raised)}");
+            Console.Out.WriteLine($"    {alert.Text}");
+            Console.Out.WriteLine($"    {alert.Id}");
         }
 
-        AnsiConsole.Write(table);
         Console.Out.WriteLine("loadwatch explain ID prints the numbers behind one.");
     }
 }

@@ -40,13 +40,13 @@ public static class SweepCommand
         }
     }
 
-    /// <summary>One line that counts each state.</summary>
+    /// <summary>One line that counts each state; members of archives are arrivals of their own.</summary>
     public static string Counts(SweepReport report)
     {
         var states = Enum.GetValues<ArrivalState>()
             .Where(state => state != ArrivalState.Waiting)
             .Select(state => $"{report.CountOf(state)} {state.ToString().ToLowerInvariant()}");
-        return $"{report.Seen} files seen: {string.Join(", ", states)}, {report.Settling} still settling; "
+        return $"{report.Seen} files in the inboxes, {report.Settling} still settling. New arrivals: {string.Join(", ", states)}. "
             + $"{report.AlertChanges} alert changes, {report.NoticesDecided} briefs decided.";
     }
 }

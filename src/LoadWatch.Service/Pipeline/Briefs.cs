@@ -49,10 +49,12 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now)
     /// <summary>The contact's brief as of now, due or not.</summary>
     public Brief Build(StoreSession session, Contact contact)
     {
-        var told = session.Notices.LastBrief(contact.Id)?.AlertPosition ?? 0;
+        // New is what no brief of an earlier date told: the page of a morning stays the same after that morning's brief was decided.
+        var today = now.InZone(contact.Zone).Date;
+        var told = session.Notices.LastBrief(contact.Id, today)?.AlertPosition ?? 0;
         var news = session.Alerts.Changes.Since(told).ToLookup(change => change.AlertId, StringComparer.Ordinal);
         var subjects = configuration.PeopleOf(contact).Select(person => Subject(session, person, news)).ToList();
-        return BriefBuilder.Build(contact, now.InZone(contact.Zone).Date, subjects, Questions(session, contact));
+        return BriefBuilder.Build(contact, today, subjects, Questions(session, contact));
     }
 
     private BriefSubject Subject(StoreSession session, Person person, ILookup<string, AlertChange> news)

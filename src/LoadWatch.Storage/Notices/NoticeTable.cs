@@ -22,7 +22,7 @@ public sealed class NoticeTable
     private const string CountOne = "SELECT COUNT(*) FROM notice WHERE key = @key";
 
     private const string SelectLastBrief =
-        "SELECT date, alert_position FROM notice WHERE contact = @contactId AND kind = 'brief' ORDER BY date DESC LIMIT 1";
+        "SELECT date, alert_position FROM notice WHERE contact = @contactId AND kind = 'brief' AND date < @before ORDER BY date DESC LIMIT 1";
 
     private const string SelectPending = $"""
         SELECT {Columns}, d.channel, d.recipient, d.attempts, d.last_error
@@ -48,9 +48,9 @@ public sealed class NoticeTable
 
     public Notice? Get(string key) => session.Row<NoticeRow>(SelectOne, new { key })?.ToNotice();
 
-    /// <summary>The contact's latest brief, or null before any.</summary>
-    public LastBrief? LastBrief(string contactId) =>
-        session.Row<NoticeRow>(SelectLastBrief, new { contactId }) is { } row ? new LastBrief(row.Date, row.AlertPosition) : null;
+    /// <summary>The contact's latest brief dated before a date, or null.</summary>
+    public LastBrief? LastBrief(string contactId, LocalDate before) =>
+        session.Row<NoticeRow>(SelectLastBrief, new { contactId, before }) is { } row ? new LastBrief(row.Date, row.AlertPosition) : null;
 
     /// <summary>Freezes a notice and asks for its deliveries. False, and nothing changed, when one of its key was decided before.</summary>
     /// <param name="alertPosition">The last alert change that it knows of.</param>

@@ -33,7 +33,7 @@ public sealed class NoticeTableTests(SharedFolder shared) : StoreTest(shared)
     [Fact]
     public void TheLastBriefOfAContactTellsItsDateAndWhatItKnew()
     {
-        Assert.Null(Store.Read(session => session.Notices.LastBrief("coach")));
+        Assert.Null(Store.Read(session => session.Notices.LastBrief("coach", Some.Date.PlusDays(9))));
         Store.Write(session =>
         {
             session.Notices.Add(Some.Notice("coach", Some.Date.PlusDays(1)), 7, []);
@@ -42,7 +42,8 @@ public sealed class NoticeTableTests(SharedFolder shared) : StoreTest(shared)
             session.Notices.Add(Some.Notice("coach", Some.Date.PlusDays(8)) with { Key = "coach|inbox_gone|2026-03-09" }, 11, []);
         });
 
-        Assert.Equal(new LastBrief(Some.Date.PlusDays(1), 7), Store.Read(session => session.Notices.LastBrief("coach")));
+        Assert.Equal(new LastBrief(Some.Date.PlusDays(1), 7), Store.Read(session => session.Notices.LastBrief("coach", Some.Date.PlusDays(9))));
+        Assert.Equal(new LastBrief(Some.Date, 3), Store.Read(session => session.Notices.LastBrief("coach", Some.Date.PlusDays(1))));
     }
 
     [Fact]
