@@ -23,6 +23,27 @@ public class SessionStimulusTests
     }
 
     [Fact]
+    public void PowerOnFootIsAModelOfTheWatchAndIsNotRead()
+    {
+        var legs = Assert.Single(Of("running", Given.Cyclist, (Channel.Power, Given.Steps((800, 60)))).Regions);
+
+        Assert.Null(legs.HardBouts);
+        Assert.Equal("none", legs.Channel);
+        Assert.Contains(legs.NotSeen, reason => reason.Contains("model of the watch", StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void TheDetailOfASportNamesItsRegionsWhereTheSportDoesNot()
+    {
+        var samples = Given.EverySecond((Channel.Power, Given.Steps((200, 60))));
+        var rowing = Given.Recording("fitness_equipment", samples) with { Sport = new Sport("fitness_equipment", "indoor_rowing") };
+
+        var values = ActivityComputation.Compute(rowing, Given.Person(), Given.Anchors(Given.Cyclist), new ComputationSettings());
+
+        Assert.Equal([BodyRegion.Legs, BodyRegion.Trunk, BodyRegion.Arms], values.Stimulus.Select(stimulus => stimulus.Region));
+    }
+
+    [Fact]
     public void AnHourBelowCriticalPowerHoldsNoBout()
     {
         var legs = Assert.Single(Of("cycling", Given.Cyclist, (Channel.Power, Given.Steps((240, 3600)))).Regions);
