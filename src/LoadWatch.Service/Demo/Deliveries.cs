@@ -21,8 +21,8 @@ internal static class Deliveries
         var packed = new List<DemoFile>();
         foreach (var activity in DemoSessions.Of(person, seed, until))
         {
-            var back = Period.DaysBetween(Local(activity).Date, until);
-            switch (DeliveryPlan.Of(person.Part.Id, back, activity.Sets.Count > 0))
+            var date = Local(activity).Date;
+            switch (DeliveryPlan.Of(person.Part.Id, Period.DaysBetween(date, until), date.DayOfWeek, activity.Sets.Count > 0))
             {
                 case Delivery.Packed:
                     packed.Add(Fit(person, activity));

@@ -1,3 +1,5 @@
+using NodaTime;
+
 namespace LoadWatch.Service.Demo;
 
 /// <summary>A way by which a session reaches the inbox.</summary>
@@ -29,15 +31,16 @@ internal enum Delivery
 internal static class DeliveryPlan
 {
     /// <param name="back">Days before the morning of the brief.</param>
+    /// <param name="day">Of the session.</param>
     /// <param name="hasSets">A CSV holds samples only.</param>
-    public static Delivery Of(string person, int back, bool hasSets) => (person, back, hasSets) switch
+    public static Delivery Of(string person, int back, IsoDayOfWeek day, bool hasSets) => (person, back, hasSets) switch
     {
         ("lauri", >= 22 and <= 28, _) => Delivery.Packed,
         ("milla", >= 4 and <= 10, _) => Delivery.Compressed,
         ("otso", >= 8 and <= 14, false) => Delivery.Table,
         ("petra", >= 4 and <= 10, false) => Delivery.FileAndTable,
-        ("kaisa", >= 4 and <= 6, _) => Delivery.Twice,
-        ("joel", >= 4 and <= 6, _) => Delivery.AlsoCut,
+        ("kaisa", >= 4 and <= 10, _) when day == IsoDayOfWeek.Saturday => Delivery.Twice,
+        ("joel", >= 4 and <= 10, _) when day == IsoDayOfWeek.Saturday => Delivery.AlsoCut,
         _ => Delivery.File,
     };
 
@@ -46,8 +49,8 @@ internal static class DeliveryPlan
     [
         "A week of Lauri Viimakoski's comes as a zip file, some days of Milla Usvalehto's as gzip files, a week of Otso Kelovaara's rows as CSV.",
         "Some rows of Petra Sarahiisi's come twice, from two devices: each counts once, the richer one stands.",
-        "Kaisa Suvantoharju has sent some files twice under another name: each counts once.",
-        "Some uploads of Joel Terhokari's broke off: those halves are refused, the whole files beside them count.",
+        "Kaisa Suvantoharju has sent a file twice, once under another name: it counts once.",
+        "An upload of Joel Terhokari's broke off: that half is refused, the whole file beside it counts.",
         "A file in a folder that names nobody is held; a settings file of Henri Loivarinne's is put aside.",
     ];
 }

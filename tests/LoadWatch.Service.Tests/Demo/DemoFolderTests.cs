@@ -69,8 +69,8 @@ public sealed class DemoFolderTests : IDisposable
         Assert.Contains(files, file => file.StartsWith("inbox/otso/", StringComparison.Ordinal) && file.EndsWith(".csv", StringComparison.Ordinal));
         Assert.Contains(files, file => file.StartsWith("inbox/petra/", StringComparison.Ordinal) && file.EndsWith(".csv", StringComparison.Ordinal)
             && files.Contains(Path.ChangeExtension(file, ".fit")));
-        Assert.Contains(files, file => file.StartsWith("inbox/kaisa/copy of ", StringComparison.Ordinal));
-        Assert.Contains(files, file => file.StartsWith("inbox/joel/half of ", StringComparison.Ordinal));
+        Assert.Single(files, file => file.StartsWith("inbox/kaisa/copy of ", StringComparison.Ordinal));
+        Assert.Single(files, file => file.StartsWith("inbox/joel/half of ", StringComparison.Ordinal));
         Assert.Single(files, file => file.StartsWith("inbox/_unknown-upload/", StringComparison.Ordinal));
         Assert.Contains("inbox/henri/settings.fit", files);
     }
