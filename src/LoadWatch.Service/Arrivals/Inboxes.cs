@@ -42,15 +42,25 @@ public static class Inboxes
         {
             try
             {
-                foreach (var person in configuration.People.Values)
+                foreach (var folder in configuration.People.Values.Select(person => Path.Combine(inbox.Path, person.Id)).Where(path => !Directory.Exists(path)))
                 {
-                    Directory.CreateDirectory(Path.Combine(inbox.Path, person.Id));
+                    Directory.CreateDirectory(folder);
+                    LetInWhoMayDrop(inbox.Path, folder);
                 }
             }
             catch (Exception e) when (e is IOException or UnauthorizedAccessException)
             {
                 // A read-only share: its owner makes the folders.
             }
+        }
+    }
+
+    /// <summary>This process keeps what it makes to itself (I-12); an inbox is for others, so its folders are as open as it is.</summary>
+    private static void LetInWhoMayDrop(string inbox, string folder)
+    {
+        if (!OperatingSystem.IsWindows())
+        {
+            File.SetUnixFileMode(folder, File.GetUnixFileMode(inbox));
         }
     }
 }

@@ -2,6 +2,7 @@ using System.CommandLine;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Dialects;
+using LoadWatch.Storage.Files;
 
 namespace LoadWatch.Service.Commands;
 
@@ -11,6 +12,7 @@ public static class CommandLine
     /// <returns>An exit code of <see cref="ExitCode"/>.</returns>
     public static async Task<int> RunAsync(string[] args)
     {
+        PrivateFiles.SetUmask();
         var parsed = Root().Parse(args);
         if (parsed.Errors.Count > 0)
         {
