@@ -1,4 +1,5 @@
 using System.CommandLine;
+using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Demo;
 using LoadWatch.Service.Pipeline;
 using NodaTime;
@@ -24,7 +25,7 @@ public static class DemoCommand
         command.SetAction((parsed, cancel) => Task.FromResult(Run(
             parsed.GetValue(dir) ?? Path.Combine(Path.GetTempPath(), "loadwatch-demo"),
             parsed.GetValue(seed),
-            parsed.GetValue(until) ?? MachineClock.Now().InUtc().Date,
+            parsed.GetValue(until) ?? MachineClock.Now().InZone(MachineZone.Get()).Date,
             parsed.GetValue(filesOnly),
             cancel)));
         return command;
