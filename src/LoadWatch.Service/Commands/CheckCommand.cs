@@ -18,8 +18,8 @@ public static class CheckCommand
     {
         var configuration = ConfigurationReader.Read(path);
         Console.Out.WriteLine(
-            $"{path} is fine: {configuration.People.Count} people in {configuration.Groups.Count} groups, "
-            + $"{configuration.Contacts.Count} contacts, {configuration.Inboxes.Count} inboxes.");
+            $"{path} is fine. People: {configuration.People.Count}; groups: {configuration.Groups.Count}; "
+            + $"contacts: {configuration.Contacts.Count}; inboxes: {configuration.Inboxes.Count}.");
         return ExitCode.Ok;
     }
 }

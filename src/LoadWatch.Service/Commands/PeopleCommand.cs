@@ -52,21 +52,24 @@ public static class PeopleCommand
 
     private static void Print(List<PersonLine> lines)
     {
-        var table = new Table().AddColumns("person", "name", "group", "last recording", "week load", "ratio", "coverage", "heavy or fast legs");
+        var table = new Table().AddColumns("person", "name", "group", "last", "week", "ratio", "known", "legs");
         foreach (var line in lines)
         {
             table.AddRow(
                 Markup.Escape(line.Person),
                 Markup.Escape(line.Name),
                 Markup.Escape(line.Group),
-                line.LastRecorded ?? "none yet",
-                line.WeekLoad is { } load ? FormattableString.Invariant($"{load:0}") : "unknown",
-                line.RatioUncoupled is { } ratio ? FormattableString.Invariant($"{ratio:0.00}") : "unknown",
-                line.Coverage28 is { } coverage ? FormattableString.Invariant($"{100 * coverage:0} %") : "unknown",
-                line.DaysSinceHeavyOrFastLegs is { } days ? FormattableString.Invariant($"{days} days ago") : "unknown");
+                line.LastRecorded ?? "none",
+                line.WeekLoad is { } load ? FormattableString.Invariant($"{load:0}") : "?",
+                line.RatioUncoupled is { } ratio ? FormattableString.Invariant($"{ratio:0.00}") : "?",
+                line.Coverage28 is { } coverage ? FormattableString.Invariant($"{100 * coverage:0} %") : "?",
+                line.DaysSinceHeavyOrFastLegs is { } days ? FormattableString.Invariant($"{days} days") : "?");
         }
 
         AnsiConsole.Write(table);
+        Console.Out.WriteLine(
+            "last: last recording. week: load of 7 days. ratio: against the 21 days before. known: share of 28 days with known load. "
+            + "legs: since the last heavy or fast leg work. ?: unknown.");
     }
 
     private sealed record PersonLine(

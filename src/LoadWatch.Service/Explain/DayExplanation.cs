@@ -62,7 +62,7 @@ public static class DayExplanation
         foreach (var (region, state) in day.Regions.OrderBy(pair => pair.Key))
         {
             var heavy = state.HeavyOrFast switch { true => "yes", false => "no", null => "unknown" };
-            text.AppendLine(CultureInfo.InvariantCulture, $"    {BodyRegions.Word(region)}: heavy or fast {heavy}, days since {Number(state.DaysSince)}, in 28 days {Number(state.Days28)}, usual gap {Number(state.UsualGapDays)} days");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {BodyRegions.Word(region)}: heavy or fast {heavy}, days since {Number(state.DaysSince)}, in 28 days {Number(state.Days28)}, usual gap in days {Number(state.UsualGapDays)}");
         }
     }
 
