@@ -8,16 +8,18 @@ namespace LoadWatch.Activities;
 /// </summary>
 public static class ChannelLimits
 {
+    /// <summary>No distance or height is larger, metres; a hostile one would overflow a sum.</summary>
+    private const double Largest = 1e9;
+
     /// <summary>
-    /// Heart rate 25 to 250 bpm (so 0, a lost contact, and 254, a code for none, are out); power 0 to 3000 W; speed 0 to 45 m/s; every
-    /// other
-    /// channel as recorded. Never true for NaN or infinity.
+    /// Heart rate 25 to 250 bpm (so 0, a lost contact, and 254, a code for none, are out); power 0 to 3000 W; speed 0 to 45 m/s; every other channel
+    /// up to 1e9. Never true for NaN or infinity.
     /// </summary>
     public static bool Usable(Channel channel, double value) => channel switch
     {
         Channel.HeartRate => value is >= 25 and <= 250,
         Channel.Power => value is >= 0 and <= 3000,
         Channel.Speed => value is >= 0 and <= 45,
-        _ => double.IsFinite(value),
+        _ => Math.Abs(value) <= Largest,
     };
 }

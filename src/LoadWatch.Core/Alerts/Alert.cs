@@ -47,7 +47,7 @@ public enum AlertChangeReason
     Acknowledged,
     ReturnedToNormal,
 
-    /// <summary>Late or corrected data undid it on the very date it was judged (I-14).</summary>
+    /// <summary>Later data undid it: as known now it did not even hold on the date it was raised (I-14).</summary>
     Corrected,
     RaisedAgain,
 }

@@ -51,7 +51,8 @@ public static class AlertReview
 
         if (finding is null)
         {
-            var signal = heldOn(alert.Key, alert.Judged) && alert.Judged < date ? AlertSignal.Return : AlertSignal.Correct;
+            // Judged before on this very date: a later file undid it. Else what a later file settled counts only back at its raising.
+            var signal = alert.Judged < date && heldOn(alert.Key, alert.Raised) ? AlertSignal.Return : AlertSignal.Correct;
             return Step(alert, signal, date, evidence: null, lastSequence);
         }
 

@@ -68,7 +68,7 @@ public sealed record Day
     /// <summary>Share of the last 28 days with known load, 0 to 1.</summary>
     public double Coverage28 { get; init; }
 
-    /// <summary>Days from the first covered day to this date, 0 on that day; null before any.</summary>
+    /// <summary>Days from the first day with known load to this date, 0 on that day; null before any.</summary>
     public int? DaysSinceFirstCovered { get; init; }
 
     /// <summary>Days since the last recorded day, 0 on a recorded day; null before any.</summary>

@@ -1,5 +1,4 @@
-// A heavy-or-fast day of a body region: 3 hard bouts, or 6 hard repetitions in 2 sets (a choice; hard: relative drive of 0.70 or more).
-// Counts are summed over the activities of the day, mid values of their bands.
+// A heavy-or-fast day of a body region: the line of HeavyOrFastLine, with counts summed over the activities of the day, mid values of their bands.
 using LoadWatch.Stimulus;
 
 namespace LoadWatch.Days;
@@ -7,10 +6,6 @@ namespace LoadWatch.Days;
 /// <summary>Judges whether a date was heavy or fast for a body region.</summary>
 internal static class HeavyOrFast
 {
-    private const double Bouts = 3;
-    private const double Repetitions = 6;
-    private const int Sets = 2;
-
     /// <summary>Null when unknown: nothing is known of the date, or work of the region was done that no channel could see.</summary>
     public static bool? Judge(CalendarDate date, BodyRegion region) => date.State switch
     {
@@ -35,9 +30,10 @@ internal static class HeavyOrFast
     private static bool Reaches(CalendarDate date, BodyRegion region)
     {
         var work = date.Activities.SelectMany(activity => Of(activity, region)).ToList();
-        var repetitions = Significant.Round(work.Sum(stimulus => stimulus.HardRepetitions?.Mid ?? 0));
-        return Significant.Round(work.Sum(stimulus => stimulus.HardBouts?.Mid ?? 0)) >= Bouts
-            || (repetitions >= Repetitions && work.Sum(stimulus => stimulus.HardSets ?? 0) >= Sets);
+        return HeavyOrFastLine.Reached(
+            work.Sum(stimulus => stimulus.HardBouts?.Mid ?? 0),
+            work.Sum(stimulus => stimulus.HardRepetitions?.Mid ?? 0),
+            work.Sum(stimulus => stimulus.HardSets ?? 0));
     }
 
     /// <summary>An activity without an entry for the region is no work of it.</summary>

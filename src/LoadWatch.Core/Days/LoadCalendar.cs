@@ -28,7 +28,6 @@ public static class LoadCalendar
         State = date.State,
         StateSource = date.StateSource,
         Load = date.Load,
-        DaysSinceFirstCovered = date.Index,
         DaysSinceRecorded = date.DaysSinceRecorded,
     };
 

@@ -1,5 +1,5 @@
 // Monotony = mean / standard deviation of 7 daily loads; strain = load of the week x monotony.
-// Foster 1998, "Monitoring training in athletes with reference to overtraining syndrome".
+// Foster 1998, Med Sci Sports Exerc 30:1164-1168.
 // Rest days count as 0. Departures: the paper does not say which standard deviation, here n - 1; equal loads have none, so no monotony;
 // one unknown day leaves both unknown.
 namespace LoadWatch.Days;

@@ -1,9 +1,7 @@
 // Acute and chronic load and their ratios.
-//   coupled    A / ((A + W1 + W2 + W3) / 4)    Lolli et al. 2019, "Mathematical coupling causes spurious correlation within the conventional
-//                                              acute-to-chronic workload ratio calculations"
-//   uncoupled  A / ((W1 + W2 + W3) / 3)        Windt and Gabbett 2018, "Is it all for naught? What does mathematical coupling mean for
-//                                              acute:chronic workload ratios?"
-//   weighted   E7 / E28                        Williams et al. 2017, "Better way to determine the acute:chronic workload ratio?"
+//   coupled    A / ((A + W1 + W2 + W3) / 4)    Lolli et al. 2019, Br J Sports Med 53:921-922
+//   uncoupled  A / ((W1 + W2 + W3) / 3)        Windt and Gabbett 2018, Br J Sports Med 53:988-990
+//   weighted   E7 / E28                        Williams, West, Cross and Stokes 2017, Br J Sports Med 51:209-210
 // A: load of the last 7 days, W1..W3: the weeks before, E: see WeightedAverage. Loads in the group's unit, ratios dimensionless.
 // Departures: a window with unknown days is scaled to its known ones, and is null where too few are known; over zero a ratio is null.
 using System.Runtime.InteropServices;
@@ -19,6 +17,7 @@ internal sealed class LoadTrend
     private const int MedianDays = 365;
 
     private readonly List<double?> loads = [];
+    private int? firstCovered;
     private readonly List<double?> chronics = [];
     private readonly RunningMedian chronicMedian = new();
     private readonly WeightedAverage acuteAverage = new(7);
@@ -28,7 +27,8 @@ internal sealed class LoadTrend
     public Day Add(Day day)
     {
         loads.Add(day.Load);
-        return WithMedian(WithSpread(WithAverages(WithWeeks(day))));
+        firstCovered ??= day.Load.HasValue ? loads.Count - 1 : null;
+        return WithMedian(WithSpread(WithAverages(WithWeeks(day with { DaysSinceFirstCovered = loads.Count - 1 - firstCovered }))));
     }
 
     private ReadOnlySpan<double?> Loads => CollectionsMarshal.AsSpan(loads);
@@ -37,7 +37,7 @@ internal sealed class LoadTrend
     {
         var (week, month) = (LoadWindow.Of(Loads, 0, 7), LoadWindow.Of(Loads, 0, 28));
         var acute = week.MeanWeek(KnownOf7);
-        var chronic = loads.Count >= 28 ? month.MeanWeek(KnownOf28) : null;
+        var chronic = day.DaysSinceFirstCovered >= 27 ? month.MeanWeek(KnownOf28) : null;
         var before = chronic.HasValue ? LoadWindow.Of(Loads, 7, 21).MeanWeek(KnownOf21) : null;
         var lastWeek = LoadWindow.Of(Loads, 7, 7).MeanWeek(KnownOf7);
         return day with

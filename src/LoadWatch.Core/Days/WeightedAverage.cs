@@ -1,5 +1,5 @@
 // Exponentially weighted average E = lambda L + (1 - lambda) E', lambda = 2 / (N + 1).
-// Williams et al. 2017, "Better way to determine the acute:chronic workload ratio?" (N = 7 and 28 days).
+// Williams, West, Cross and Stokes 2017, Br J Sports Med 51:209-210 (N = 7 and 28 days; lambda from secondary pages that agree).
 // E: average, load per day; E': of the day before; L: load of the day; N: days. Departures, all a choice: it starts at the first known load;
 // an unknown day leaves it as it was; the value rounded to 9 digits is the one that goes on, so a series can be taken up from any stored day.
 namespace LoadWatch.Days;

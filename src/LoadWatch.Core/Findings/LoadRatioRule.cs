@@ -1,5 +1,5 @@
 // Acute load against the usual week, uncoupled: U = 7-day load / mean week of the 21 days before.
-// Windt and Gabbett 2018, "Is it all for naught? What does mathematical coupling mean for acute:chronic workload ratios?";
+// Windt and Gabbett 2018, Br J Sports Med 53:988-990;
 // the limit of 1.8 uncoupled is 1.5 coupled: C = 4 U / (U + 3). That a limit is watched at all, its value, coverage and return value are
 // a choice: the ratio describes change and nothing else.
 using LoadWatch.Days;
@@ -86,7 +86,7 @@ public sealed class LoadRatioRule(string loadUnit = LoadRatioRule.ArbitraryUnits
 
     private Evidence Basis(Day read, LoadRatioLimits limits) => new(
         "uncoupled ratio = load of the last 7 days / mean week of the 21 days before, both scaled to their known days",
-        "Windt and Gabbett 2018, Is it all for naught? What does mathematical coupling mean for acute:chronic workload ratios?; limits: a choice",
+        "Windt and Gabbett 2018, Br J Sports Med 53:988-990; limits: a choice",
         [
             new("ratio_uncoupled", read.RatioUncoupled, "ratio", $"on {Wording.IsoDate(read.Date)}"),
             new("acute", read.Acute, loadUnit, "load of the last 7 days"),

@@ -15,7 +15,7 @@ public sealed record RuleLimits
 /// <summary>Limits of the rule <c>load_ratio</c>: acute load well above the usual, uncoupled.</summary>
 public sealed record LoadRatioLimits
 {
-    /// <summary>Raised at this uncoupled ratio or above. 1.8 uncoupled is 1.5 coupled (Windt and Gabbett 2018). Dimensionless.</summary>
+    /// <summary>Raised at this uncoupled ratio or above. 1.8 uncoupled is 1.5 coupled, by algebra; the limit is a choice. Dimensionless.</summary>
     [Range(1.0, 10.0)]
     public double Raise { get; init; } = 1.8;
 
@@ -24,15 +24,15 @@ public sealed record LoadRatioLimits
     public double Return { get; init; } = 1.6;
 
     /// <summary>The first covered day lies at least this many days back. A choice. Days.</summary>
-    [Range(7, 365)]
+    [Range(28, 365)]
     public int HistoryDays { get; init; } = 28;
 
     /// <summary>Days with known load wanted among the last 7. A choice. Days.</summary>
-    [Range(1, 7)]
+    [Range(5, 7)]
     public int CoveredOf7 { get; init; } = 5;
 
     /// <summary>Days with known load wanted among the last 28. A choice. Days.</summary>
-    [Range(4, 28)]
+    [Range(22, 28)]
     public int CoveredOf28 { get; init; } = 22;
 
     /// <summary>The chronic load must exceed this share of its own median over 12 months: no ratio over a near-empty month. A choice. 0 to 1.</summary>
@@ -70,6 +70,9 @@ public sealed record StimulusGapLimits
     /// <summary>Share of the gap's days on which the region's stimulus was known; below it nothing is raised. 0 to 1.</summary>
     [Range(0.0, 1.0)]
     public double CoveredShare { get; init; } = 0.7;
+
+    /// <summary>Whether enough of the days of a gap are known.</summary>
+    public bool KnownEnough(int knownDays, int days) => knownDays >= Significant.Round(CoveredShare * days);
 }
 
 /// <summary>Limits of the rule <c>silence</c>: expected recordings did not come, by the rhythm of the person's own recordings. All a choice.</summary>

@@ -43,7 +43,7 @@ public sealed class StimulusGapRule : IRule
     {
         var day = days[index];
         var known = day.Regions.GetValueOrDefault(region, RegionDay.NotCovered);
-        if (known.HeavyOrFast is null || known.DaysSince is not { } gap || known.KnownDaysSince < Significant.Round(limits.CoveredShare * gap))
+        if (known.HeavyOrFast is null || known.DaysSince is not { } gap || !limits.KnownEnough(known.KnownDaysSince, gap))
         {
             return null;
         }
@@ -72,7 +72,7 @@ public sealed class StimulusGapRule : IRule
     {
         var usual = gap.Region.UsualGapDays is { } days ? $"usual gap {Wording.Days(days)}" : null;
         var known = gap.Region.KnownDaysSince < gap.Days ? $"{gap.Region.KnownDaysSince} of them known" : null;
-        var remarks = string.Join("; ", new[] { usual, known }.OfType<string>());
+        var remarks = string.Join("; ", new[] { known, usual }.OfType<string>());
         return remarks.Length == 0 ? "" : $" ({remarks})";
     }
 

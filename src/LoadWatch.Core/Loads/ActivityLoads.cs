@@ -58,7 +58,8 @@ public sealed record ActivityLoads(
             yield return ofHeartRate;
         }
 
-        if (usable.Histograms.TryGetValue(Channel.Power, out var power)
+        if (!usable.Recording.Sport.IsOnFoot
+            && usable.Histograms.TryGetValue(Channel.Power, out var power)
             && anchors.On(date, person.Id, AnchorKind.CriticalPower) is { } criticalPower)
         {
             yield return ZoneTimes.OfPower(power, criticalPower, settings.PowerBounds);

@@ -4,12 +4,10 @@ using LoadWatch.People;
 namespace LoadWatch.Loads;
 
 /// <summary>
-/// Training impulse, summed over samples. Sources: Banister 1991, Modeling elite athletic performance, in MacDougall, Wenger and Green
-/// (eds),
-/// Physiological Testing of the High-Performance Athlete; Morton, Fitz-Clarke and Banister 1990, Modeling human performance in running, J
-/// Appl Physiol 69:1171-1177.
-/// Load = sum of D x a exp(b x): D minutes at fraction x of heart-rate reserve (0 to 1, clamped), a = 0.64, b = 1.92 for men, a = 0.86, b
-/// = 1.67 for women.
+/// Training impulse, summed over samples. Sources: Morton, Fitz-Clarke and Banister 1990, Modeling human performance in running, J Appl Physiol
+/// 69:1171-1177; Banister 1991, Modeling elite athletic performance (from memory). The coefficients are those of several secondary pages that agree.
+/// Load = sum of D x a exp(b x): D minutes at fraction x of heart-rate reserve (0 to 1, clamped), a = 0.64 and b = 1.92 for men, a = 0.86 and b = 1.67
+/// for women.
 /// Departures: summed over the histogram instead of taken at the session's mean, which under-counts intervals because the weight is convex
 /// in x;
 /// where the sex is not stated, the mean of the two pairs (a choice, marked as estimated).

@@ -97,7 +97,7 @@ internal static class BriefRows
             yield return $"no heavy or fast leg work seen in {days + 1} days on record";
         }
         else if (today?.Regions.GetValueOrDefault(BodyRegion.Legs) is { DaysSince: > 0 and { } since } legs
-            && legs.KnownDaysSince < since * subject.Group.Limits.StimulusGap.CoveredShare)
+            && !subject.Group.Limits.StimulusGap.KnownEnough(legs.KnownDaysSince, since))
         {
             yield return $"leg work known on {legs.KnownDaysSince} of the {since} days since the last heavy or fast one";
         }

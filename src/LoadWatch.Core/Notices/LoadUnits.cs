@@ -3,7 +3,7 @@ using LoadWatch.Loads;
 namespace LoadWatch.Notices;
 
 /// <summary>The unit that stands over a column of loads.</summary>
-internal static class LoadUnits
+public static class LoadUnits
 {
     /// <summary>The unit of a built-in quantity; for any other its name in words.</summary>
     public static string Of(string quantity) => quantity switch

@@ -35,11 +35,19 @@ public sealed record ArrivalVerdict(ArrivalState State, string? Reason, string? 
         return claims.Count switch
         {
             0 => new ArrivalVerdict(ArrivalState.Held, "owner unknown: no folder above it is named after a person of the roster", null),
-            1 => new ArrivalVerdict(ArrivalState.Stored, file.Problems.Count > 0 ? file.Problems[0].ToString() : null, claims.Single()),
+            1 => new ArrivalVerdict(ArrivalState.Stored, FirstRemark(file, now), claims.Single()),
             _ => new ArrivalVerdict(
                 ArrivalState.Held, $"claimed by {string.Join(" and ", claims.Order(StringComparer.Ordinal))}", null),
         };
     }
+
+    /// <summary>The first problem, else the first session that does not count although its file is stored; null when all is well.</summary>
+    private static string? FirstRemark(DecodedFile file, Instant now) =>
+        file.Problems.Count > 0
+            ? file.Problems[0].ToString()
+            : file.Recordings.Where(recording => !IsUsable(recording, now))
+                .Select(recording => $"session {recording.Part} does not count: {(recording.Start is null ? "no date" : "date implausible")}")
+                .FirstOrDefault();
 
     /// <summary>Whether a recording carries a plausible date and so counts once its arrival is stored.</summary>
     public static bool IsUsable(Recording recording, Instant now) =>

@@ -5,6 +5,9 @@ public sealed record Sport(string Name, string? Detail = null)
 {
     public static Sport Generic { get; } = new("generic");
 
+    /// <summary>On foot, power is a watch's model of speed and slope: a critical power from a bicycle or an ergometer does not belong to it.</summary>
+    public bool IsOnFoot => Name is "running" or "walking" or "hiking";
+
     /// <summary><c>name</c> or <c>name/detail</c>.</summary>
     public override string ToString() => Detail is null ? Name : $"{Name}/{Detail}";
 

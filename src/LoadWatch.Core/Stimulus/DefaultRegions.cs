@@ -49,6 +49,8 @@ public static class DefaultRegions
         new Dictionary<string, IReadOnlyList<BodyRegion>>(StringComparer.Ordinal)
         {
             ["cycling"] = Legs,
+            ["cycling/hand_cycling"] = Arms,
+            ["cycling/indoor_hand_cycling"] = Arms,
             ["e_biking"] = Legs,
             ["running"] = Legs,
             ["walking"] = Legs,

@@ -6,12 +6,9 @@ using NodaTime;
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// Relative drive from heart rate: e = 0.65 x / x2, x the fraction of heart-rate reserve, x2 the fraction at the second threshold, so that
-/// a steady state
-/// told by heart rate and by power gives the same drive. Assumption. Heart rate lags by half a minute and more: it never shows a bout, and
-/// never that there was none.
-/// Without an anchored threshold x2 = 0.85 (common practice, no published source for all; between 0.8 and 0.9 in trained people), marked
-/// by its error.
+/// Relative drive from heart rate: e = 0.65 x / x2, x the fraction of heart-rate reserve, x2 the fraction at the second threshold, so that a steady
+/// state told by heart rate and by power gives the same drive. Assumption. Heart rate lags by half a minute and more: it never shows a bout, and never
+/// that there was none. Without an anchored threshold x2 = 0.85, a choice, marked by its error.
 /// </summary>
 /// <param name="Threshold">x2, above 0, at most 1.</param>
 /// <param name="RelativeError">Of x2.</param>

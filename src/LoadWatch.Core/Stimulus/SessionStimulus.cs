@@ -15,9 +15,6 @@ namespace LoadWatch.Stimulus;
 /// <param name="Remarks">In plain words.</param>
 public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IReadOnlyList<string> Remarks)
 {
-    /// <summary>On foot, power is a watch's model of speed and slope: a critical power from a bicycle or an ergometer does not belong to it.</summary>
-    private static readonly string[] ModelledPower = ["running", "walking", "hiking"];
-
     private const string NoChannel =
         "nothing to read it from: power with critical_power, or heart rate with heart_rate_rest and heart_rate_max";
 
@@ -40,10 +37,11 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
         var sport = usable.Recording.Sport;
         if (!sports.TryGetValue(sport.ToString(), out var regions) && !sports.TryGetValue(sport.Name, out regions))
         {
-            return new SessionStimulus([], [$"sport {sport} names no body region: no stimulus from its channels"]);
+            var question = $"sport {sport}: which body regions?";
+            return new SessionStimulus([.. BodyRegions.All.Select(region => EnduranceEstimate.Nothing.For(region, [question]))], [question]);
         }
 
-        var capacity = ModelledPower.Contains(sport.Name) ? null : PowerCapacity.On(date, person.Id, anchors);
+        var capacity = sport.IsOnFoot ? null : PowerCapacity.On(date, person.Id, anchors);
         var notSeen = NotRead(usable, capacity).ToList();
         var estimate = Best(usable, capacity, date, person, anchors);
         return new SessionStimulus([.. regions.Distinct().Order().Select(region => estimate.For(region, notSeen))], []);
@@ -68,7 +66,7 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
         {
             if (capacity is null)
             {
-                yield return ModelledPower.Contains(usable.Recording.Sport.Name)
+                yield return usable.Recording.Sport.IsOnFoot
                     ? "power on foot is a model of the watch and is not read"
                     : "power: no critical_power to read it against";
             }

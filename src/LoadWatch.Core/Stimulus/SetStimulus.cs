@@ -8,8 +8,10 @@ namespace LoadWatch.Stimulus;
 public static class SetStimulus
 {
     /// <param name="demands">The sets that could be read; none: every figure is unknown.</param>
+    /// <param name="unread">How many more working sets may have gone through the region and could not be read: then hard repetitions below the line of a
+    /// heavy session are unknown, not few.</param>
     /// <param name="notSeen">What was missing in the others.</param>
-    public static RegionStimulus Of(BodyRegion region, IReadOnlyList<SetDemand> demands, IReadOnlyList<string> notSeen)
+    public static RegionStimulus Of(BodyRegion region, IReadOnlyList<SetDemand> demands, int unread, IReadOnlyList<string> notSeen)
     {
         if (demands.Count == 0)
         {
@@ -19,13 +21,14 @@ public static class SetStimulus
         var low = Read(demands, Variant.Low);
         var mid = Read(demands, Variant.Mid);
         var high = Read(demands, Variant.High);
+        var isKnown = unread == 0 || HeavyOrFastLine.Reached(0, mid.HardRepetitions, mid.HardSets);
         return new RegionStimulus(
             region,
             demands.Max(demand => demand.Grade),
             StimulusChannels.Sets,
             HardBouts: null,
-            Bands.Of(low, mid, high, reading => reading.HardRepetitions),
-            mid.HardSets,
+            isKnown ? Bands.Of(low, mid, high, reading => reading.HardRepetitions) : null,
+            isKnown ? mid.HardSets : null,
             Bands.Of(low, mid, high, reading => reading.Seconds.Slow),
             Bands.Of(low, mid, high, reading => reading.Seconds.Medium),
             Bands.Of(low, mid, high, reading => reading.Seconds.Large),

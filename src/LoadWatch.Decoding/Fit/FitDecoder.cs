@@ -58,8 +58,14 @@ public sealed class FitDecoder
 
     private void ReadParts()
     {
-        for (long offset = 0; offset < bytes.Length && problems.Count < MostProblems;)
+        for (long offset = 0; offset < bytes.Length;)
         {
+            if (problems.Count >= MostProblems)
+            {
+                problems.Add(new Problem(ProblemSeverity.Error, $"after {MostProblems} damaged parts the rest is not read", offset));
+                return;
+            }
+
             if (!FitFrame.HasHeader(bytes.Span[(int)offset..]))
             {
                 NoteStray(offset);
@@ -85,7 +91,7 @@ public sealed class FitDecoder
         var fault = frame.Check(bytes.Span)
             ?? reader.Read(bytes.Span[frame.DataStart..(int)frame.DataEnd], frame.DataStart);
         if (fault is null)
-            Take(reader.Content);
+            Take(reader.Content, frame.Offset);
         else
             Refuse(fault);
 
@@ -99,11 +105,13 @@ public sealed class FitDecoder
     }
 
     /// <summary>Beats in parts of their own belong to the activity before them, so an activity waits for the part behind it.</summary>
-    private void Take(PartContent content)
+    private void Take(PartContent content, long offset)
     {
         fileTypes.Add(content.FileType);
-        if (content.HasOnlyBeats)
-            pending?.Late.Beats.AddRange(content.Late.Beats);
+        if (content.HasOnlyBeats && pending is null)
+            problems.Add(new Problem(ProblemSeverity.Warning, "heart beats without an activity before them", offset));
+        else if (content.HasOnlyBeats)
+            pending!.Late.Beats.AddRange(content.Late.Beats);
         else if (content.HasTraining)
         {
             Settle();

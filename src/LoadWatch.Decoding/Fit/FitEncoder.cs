@@ -127,7 +127,7 @@ public static class FitEncoder
         for (var i = 0; i < starts.Count; i++)
         {
             var end = i + 1 < starts.Count ? starts[i + 1] : activity.End;
-            writer.Message(LapType, Seconds(end), Seconds(starts[i]), (end - starts[i]).TotalMilliseconds);
+            writer.Message(LapType, Seconds(activity.End), Seconds(starts[i]), (end - starts[i]).TotalMilliseconds);
         }
     }
 

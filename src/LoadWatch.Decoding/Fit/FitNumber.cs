@@ -2,9 +2,12 @@ using System.Buffers.Binary;
 
 namespace LoadWatch.Decoding.Fit;
 
-/// <summary>Reads single values. What the type declares to be no value, and anything not finite, is NaN.</summary>
+/// <summary>Reads single values. What the type declares to be no value, and real numbers beyond any reading, are NaN.</summary>
 internal static class FitNumber
 {
+    /// <summary>No reading is larger: a real number beyond it is damage or malice, and sums of it would overflow.</summary>
+    private const double LargestReal = 1e12;
+
     /// <summary>The first value of a field that is one, or NaN.</summary>
     public static double FirstValid(ReadOnlySpan<byte> field, FitBaseType type, bool bigEndian)
     {
@@ -50,5 +53,5 @@ internal static class FitNumber
 
     private static double Unless(long value, long noValue) => value == noValue ? double.NaN : value;
 
-    private static double Finite(double value) => double.IsFinite(value) ? value : double.NaN;
+    private static double Finite(double value) => Math.Abs(value) <= LargestReal ? value : double.NaN;
 }

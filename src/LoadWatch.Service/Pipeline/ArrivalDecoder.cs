@@ -3,6 +3,7 @@ using LoadWatch.Decoding;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
+using LoadWatch.Service.Export;
 using LoadWatch.Storage.Archives;
 using LoadWatch.Storage.Recordings;
 using NodaTime;
@@ -12,10 +13,24 @@ namespace LoadWatch.Service.Pipeline;
 /// <summary>From bytes to a judged arrival with all its values. Pure but for reading the archive; safe to use from several threads.</summary>
 public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSet decoders, Archive archive, Instant now)
 {
+    /// <summary>Never fails for what the content holds: one that breaks the computation is refused, and the others go on (I-10).</summary>
     /// <param name="claims">Ids of the people whom all sightings of the content name.</param>
     public DecodedArrival Decode(ArrivalContent content, IReadOnlyCollection<string> claims)
     {
-        var kind = content.Kind.ToString().ToLowerInvariant();
+        try
+        {
+            return DecodeSound(content, claims);
+        }
+        catch (Exception e) when (e is ArithmeticException or ArgumentException or InvalidOperationException or IndexOutOfRangeException)
+        {
+            var reason = $"a defect of LoadWatch, please report it: {e.GetType().Name} while it was computed";
+            return new DecodedArrival(content.Sha, Words.Of(content.Kind), new ArrivalVerdict(ArrivalState.Refused, reason, null), []);
+        }
+    }
+
+    private DecodedArrival DecodeSound(ArrivalContent content, IReadOnlyCollection<string> claims)
+    {
+        var kind = Words.Of(content.Kind);
         if (content.Kind is ContentKind.Gzip or ContentKind.Zip)
         {
             return new DecodedArrival(content.Sha, kind, ContainerVerdict(content), []);

@@ -113,7 +113,7 @@ public class ActivityComputationTests
 
         Assert.Empty(values.Quantities);
         Assert.Empty(values.UsableShare);
-        Assert.Empty(values.Stimulus);
+        Assert.All(values.Stimulus, stimulus => Assert.True(stimulus.HardBouts is null && stimulus.SlowSeconds is null, "unknown, not none"));
     }
 
     [Fact]

@@ -2,7 +2,7 @@ using static LoadWatch.Tests.Days.Training;
 
 namespace LoadWatch.Tests.Days;
 
-/// <summary>Monotony and strain after Foster 1998, "Monitoring training in athletes with reference to overtraining syndrome", with n - 1.</summary>
+/// <summary>Monotony and strain after Foster 1998, Med Sci Sports Exerc 30:1164-1168, with n - 1.</summary>
 public class LoadSpreadTests
 {
     /// <summary>Hand calculation.</summary>

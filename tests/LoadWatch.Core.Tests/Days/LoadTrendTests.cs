@@ -109,6 +109,17 @@ public class LoadTrendTests
         Near(5 / 7.0, Daily([100, null, 100, 100, null, 100, 100])[^1].Coverage7);
     }
 
+    [Fact]
+    public void HistoryBeginsWithTheFirstKnownLoad()
+    {
+        var days = Daily([null, null, .. Repeat(100, 28)]);
+
+        Assert.Null(days[1].DaysSinceFirstCovered);
+        Assert.Equal(0, days[2].DaysSinceFirstCovered);
+        Assert.Null(days[28].Chronic);
+        Assert.Equal(700, days[29].Chronic);
+    }
+
     /// <summary>A steady load stays the same load however many days are unknown, as long as it is known at all.</summary>
     [Theory]
     [InlineData(4, 2, true)]
@@ -117,7 +128,7 @@ public class LoadTrendTests
     [InlineData(5, 0, false)]
     public void TwentyTwoOf28AndSeventeenOf21DaysAreWanted(int unknownBefore, int unknownLately, bool known)
     {
-        var before = Repeat(null, unknownBefore).Concat(Repeat(100, 21 - unknownBefore));
+        var before = Repeat(100, 1).Concat(Repeat(null, unknownBefore)).Concat(Repeat(100, 20 - unknownBefore));
         var lately = Repeat(null, unknownLately).Concat(Repeat(100, 7 - unknownLately));
         var day = Daily(before.Concat(lately))[^1];
 

@@ -86,7 +86,7 @@ public class StimulusGapRuleTests
         Assert.Equal("No heavy or fast leg work for 15 days (usual gap 3 days); last on 5 January.", Rule.Of(GapOf(15, 3))[^1].Text);
         Assert.Equal("No heavy or fast leg work for 15 days; last on 5 January.", Rule.Of(GapOf(15))[^1].Text);
         Assert.Equal(
-            "No heavy or fast leg work for 10 days (usual gap 1 day; 8 of them known); last on 26 December 2025.",
+            "No heavy or fast leg work for 10 days (8 of them known; usual gap 1 day); last on 26 December 2025.",
             Rule.Of([Gap(0, 10, 8, usual: 1)])[^1].Text);
     }
 

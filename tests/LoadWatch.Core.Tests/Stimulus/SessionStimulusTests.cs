@@ -105,8 +105,19 @@ public class SessionStimulusTests
     {
         var stimulus = Of("fencing", HeartAnchors, (Channel.HeartRate, Given.Steps((150, 60))));
 
-        Assert.Empty(stimulus.Regions);
+        Assert.Equal(BodyRegions.All, stimulus.Regions.Select(region => region.Region));
+        Assert.All(stimulus.Regions, region => Assert.Null(region.HardBouts));
         Assert.Contains("fencing", Assert.Single(stimulus.Remarks), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void ASetOfAnUnknownExerciseLeavesNoRegionKnownToHaveRested()
+    {
+        var stimulus = OfSets([], Given.Set("bulgarian_split_squat", 8, 100), Given.Set(null, 8, 100));
+
+        Assert.Equal(BodyRegions.All, stimulus.Regions.Select(region => region.Region));
+        Assert.All(stimulus.Regions, region => Assert.Null(region.HardRepetitions));
+        Assert.Equal(2, stimulus.Remarks.Count);
     }
 
     [Fact]
@@ -129,7 +140,7 @@ public class SessionStimulusTests
     {
         var stimulus = OfSets([], Given.Set("squat", 8, 80, 2), Given.Set("turkish_walk", 8, 80, 2), Given.Set(null, 8, 80, 2));
 
-        Assert.Equal(BodyRegion.Legs, Assert.Single(stimulus.Regions).Region);
+        Assert.Equal(BodyRegions.All, stimulus.Regions.Select(region => region.Region));
         Assert.Equal(
             ["1 set of turkish_walk: which body region?", "1 set without an exercise: which body region?"],
             stimulus.Regions[0].NotSeen);

@@ -54,12 +54,23 @@ public class SetStimulusTests
     [Fact]
     public void WithoutReserveTheLoadAloneIsALowerBound()
     {
-        var region = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", 12, 60), Maximum)!], []);
+        var region = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", 12, 60), Maximum)!], unread: 0, []);
 
         Assert.Equal(0, region.HardRepetitions!.Value.Mid);
         Assert.True(region.HardRepetitions.Value.High >= 7, "taken to failure 60 % reaches the line before the end");
         Assert.Equal(0, region.HardSets);
         Assert.Contains("lower bound", Assert.Single(region.NotSeen), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void HardRepetitionsBesideAnUnreadSetAreUnknownUntilTheLineIsReached()
+    {
+        var light = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", 5, 20), Maximum)!], unread: 5, []);
+        var hard = Enumerable.Repeat(Demand(Given.Set("squat", 5, 85, 1), Maximum)!, 2).ToList();
+
+        Assert.Null(light.HardRepetitions);
+        Assert.Null(light.HardSets);
+        Assert.Equal(10, SetStimulus.Of(BodyRegion.Legs, hard, unread: 5, []).HardRepetitions!.Value.Mid);
     }
 
     /// <summary>Load chart: 8 done and 2 in reserve are 75 %.</summary>
@@ -91,8 +102,8 @@ public class SetStimulusTests
     public void BandsAndClassesAreAlwaysOrderedAndMoreReserveNeverRaisesThem() =>
         Gen.Select(Gen.Int[1, 40], Gen.Double[1, 150], Gen.Double[0, 20]).Sample((repetitions, kilograms, reserve) =>
         {
-            var region = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", repetitions, kilograms, reserve), Maximum)!], []);
-            var further = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", repetitions, kilograms, reserve + 1), Maximum)!], []);
+            var region = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", repetitions, kilograms, reserve), Maximum)!], unread: 0, []);
+            var further = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", repetitions, kilograms, reserve + 1), Maximum)!], unread: 0, []);
             Band[] bands = [region.HardRepetitions!.Value, region.SlowSeconds!.Value, region.MediumSeconds!.Value, region.LargeSeconds!.Value];
             return Array.TrueForAll(bands, band => band.Low >= 0 && band.Low <= band.Mid && band.Mid <= band.High && band.High <= repetitions)
                 && region.SlowSeconds.Value.Mid >= region.MediumSeconds.Value.Mid

@@ -11,9 +11,7 @@ public class FitVectorTests
     [Theory]
     [InlineData("v01")]
     [InlineData("v02")]
-    [InlineData("v06")]
     [InlineData("v08")]
-    [InlineData("v09")]
     [InlineData("v10")]
     public void AWholeFileWithoutTrainingGivesNoRecordingAndNoProblem(string vector)
     {
@@ -22,6 +20,16 @@ public class FitVectorTests
         Assert.Empty(decoded.Problems);
         Assert.Empty(decoded.Recordings);
         Assert.Equal(FitCompleteness.Complete, FitDecoder.CheckCompleteness(FitVectors.Get(vector)));
+    }
+
+    [Theory]
+    [InlineData("v06")]
+    [InlineData("v09")]
+    public void BeatsWithoutAnActivityBeforeThemAreNamed(string vector)
+    {
+        var decoded = FitDecoder.Decode(FitVectors.Get(vector));
+        Assert.Contains("heart beats without an activity", Assert.Single(decoded.Problems).Reason, StringComparison.Ordinal);
+        Assert.Empty(decoded.Recordings);
     }
 
     [Fact]
