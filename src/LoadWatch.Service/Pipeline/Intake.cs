@@ -58,7 +58,7 @@ public sealed class Intake(
     private List<SeenContent> Contents(List<TakenFile> taken) =>
         taken.AsParallel().AsOrdered()
             .SelectMany(file => ArrivalContent.Expand(decoders, file.Copy.Sha, file.File.Path, file.Copy.Bytes)
-                .Select(content => new SeenContent(content, file)))
+                .Select(content => new SeenContent(content, new Origin(file.File.Inbox.Name, now, file.Stamp))))
             .ToList();
 
     private static IEnumerable<List<FoundFile>> Groups(IReadOnlyList<(FoundFile File, FileStamp Stamp)> files)

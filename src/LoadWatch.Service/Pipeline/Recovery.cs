@@ -30,7 +30,7 @@ public sealed class Recovery(Store store, Archive archive, ArchiveReader reader,
         {
             if (probe.Survives(archive.PathOf(arrival.ObjectSha), arrival.Size))
             {
-                settlement.Settle(reader.Contents(arrival.ObjectSha).ToList(), force: false);
+                settlement.Settle(reader.Sighted(arrival.ObjectSha).ToList(), force: false);
                 return;
             }
 

@@ -30,7 +30,7 @@ public sealed class Sweep
         var decoders = new DecoderSet(configuration.Layouts);
         var decoder = new ArrivalDecoder(configuration, decoders, archive, now);
         reader = new ArchiveReader(store, archive, decoders);
-        settlement = new Settlement(configuration, store, decoder, now, Report);
+        settlement = new Settlement(configuration, store, decoder, Report);
         intake = new Intake(configuration, store, archive, decoders, settlement, now, Report);
         recovery = new Recovery(store, archive, reader, settlement, probe);
         briefs = new Briefs(configuration, now);
@@ -62,7 +62,7 @@ public sealed class Sweep
         foreach (var group in objects.Chunk(ObjectsInOneCommit))
         {
             cancel.ThrowIfCancellationRequested();
-            settlement.Settle(group.SelectMany(reader.Contents).ToList(), force: true);
+            settlement.Settle(group.SelectMany(reader.Kept).ToList(), force: true);
             done += group.Length;
             progress?.Invoke(done, objects.Count);
         }
