@@ -52,7 +52,11 @@ public sealed class Sweep
     public SweepReport Rebuild(CancellationToken cancel, Action<int, int>? progress = null)
     {
         recovery.Run(cancel);
-        var objects = store.Read(session => session.Arrivals.All()).Select(arrival => arrival.ObjectSha).Distinct(StringComparer.Ordinal).ToList();
+        var objects = store.Read(session => session.Arrivals.All())
+            .Where(arrival => !Recovery.IsPoisonous(arrival))
+            .Select(arrival => arrival.ObjectSha)
+            .Distinct(StringComparer.Ordinal)
+            .ToList();
         store.Write(session =>
         {
             session.Derived.Empty();
