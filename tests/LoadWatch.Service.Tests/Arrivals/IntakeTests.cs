@@ -77,16 +77,10 @@ public sealed class IntakeTests : IDisposable
     public void AnInboxThatIsTakenFromIsEmptyAndTheArchiveHoldsWhatWasThere()
     {
         using var moving = new WorkingFolder(take: "move");
-        foreach (var (path, bytes) in Some.Fortnight())
-        {
-            moving.Put(path, bytes);
-        }
+        moving.Fill(Some.Fortnight());
 
         using var leaving = new WorkingFolder();
-        foreach (var (path, bytes) in Some.Fortnight())
-        {
-            leaving.Put(path, bytes);
-        }
+        leaving.Fill(Some.Fortnight());
 
         var hashes = moving.InboxHashes();
         moving.Sweep();

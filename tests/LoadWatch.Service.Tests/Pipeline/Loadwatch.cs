@@ -12,6 +12,8 @@ internal sealed class Loadwatch : IDisposable
     private readonly StringBuilder output = new();
     private readonly StringBuilder errors = new();
 
+    private bool disposed;
+
     private Loadwatch(Process process) => this.process = process;
 
     private static string Program => Path.Combine(AppContext.BaseDirectory, "loadwatch.dll");
@@ -77,6 +79,12 @@ internal sealed class Loadwatch : IDisposable
 
     public void Dispose()
     {
+        if (disposed)
+        {
+            return;
+        }
+
+        disposed = true;
         if (!process.HasExited)
         {
             process.Kill(entireProcessTree: true);

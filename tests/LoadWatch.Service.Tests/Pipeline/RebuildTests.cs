@@ -14,10 +14,7 @@ public sealed class RebuildTests : IDisposable
 
     public RebuildTests()
     {
-        foreach (var (path, bytes) in Some.Fortnight())
-        {
-            folder.Put(path, bytes);
-        }
+        folder.Fill(Some.Fortnight());
 
         folder.Sweep();
     }

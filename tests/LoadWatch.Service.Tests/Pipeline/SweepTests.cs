@@ -36,10 +36,7 @@ public sealed class SweepTests : IDisposable
     [Fact]
     public void ASecondSweepChangesNothing()
     {
-        foreach (var (path, bytes) in Some.Fortnight())
-        {
-            folder.Put(path, bytes);
-        }
+        folder.Fill(Some.Fortnight());
 
         var first = folder.Sweep();
         var before = folder.Everything();

@@ -5,6 +5,7 @@ using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
 using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
+using LoadWatch.Storage.Files;
 using LoadWatch.Storage.Recordings;
 using NodaTime;
 
@@ -77,6 +78,15 @@ internal sealed class WorkingFolder : IDisposable
         ? [.. Directory.EnumerateFiles(folder, "*", SearchOption.AllDirectories).Order(StringComparer.Ordinal)]
         : [];
 
+    /// <summary>Puts every file into the inbox.</summary>
+    public void Fill(IEnumerable<(string Path, byte[] Bytes)> files)
+    {
+        foreach (var (path, bytes) in files)
+        {
+            Put(path, bytes);
+        }
+    }
+
     public void Write(string name, string text) => File.WriteAllText(Path.Combine(Root, name), text);
 
     /// <summary>Puts a file into the inbox, its time an hour before <see cref="Now"/> unless an age is given.</summary>
@@ -125,6 +135,18 @@ internal sealed class WorkingFolder : IDisposable
 
     /// <summary>The distinct hashes of the files in the inbox.</summary>
     public IReadOnlyList<string> InboxHashes() => [.. Files(Inbox).Select(path => Sha(File.ReadAllBytes(path))).Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal)];
+
+    /// <summary>The number of the process that holds the lock of the data folder, or null.</summary>
+    public string? LockHolder()
+    {
+        if (SafeFile.Open(Path.Combine(Data, "loadwatch.lock")) is not OpenedFile opened)
+        {
+            return null;
+        }
+
+        using var reader = new StreamReader(opened.Stream);
+        return reader.ReadToEnd();
+    }
 
     /// <summary>Export, archive, notices and pages of everything as one text, to be compared.</summary>
     public string Everything()
