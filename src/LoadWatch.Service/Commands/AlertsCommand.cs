@@ -56,7 +56,7 @@ public static class AlertsCommand
                 Markup.Escape(alert.Id));
         }
 
-        AnsiConsole.Write(table);
+        TableOutput.Write(table);
         Console.Out.WriteLine("loadwatch explain ID prints the numbers behind one.");
     }
 }

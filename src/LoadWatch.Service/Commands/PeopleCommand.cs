@@ -66,7 +66,7 @@ public static class PeopleCommand
                 line.DaysSinceHeavyOrFastLegs is { } days ? FormattableString.Invariant($"{days} days ago") : "unknown");
         }
 
-        AnsiConsole.Write(table);
+        TableOutput.Write(table);
     }
 
     private sealed record PersonLine(
