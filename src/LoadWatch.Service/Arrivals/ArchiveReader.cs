@@ -2,22 +2,28 @@ using LoadWatch.Decoding;
 using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Archives;
+using LoadWatch.Storage.Recordings;
 
 namespace LoadWatch.Service.Arrivals;
 
 /// <summary>Reads contents of known arrivals back from the archive.</summary>
 public sealed class ArchiveReader(Store store, Archive archive, DecoderSet decoders)
 {
-    /// <summary>The content of an archive object and of the arrivals inside it that are kept nowhere else.</summary>
-    public IEnumerable<SeenContent> Contents(string objectSha)
-    {
-        var path = store.Read(session => session.Sightings.Of(objectSha))[0].Path;
-        return ArchivedContents(objectSha, path).Select(content => new SeenContent(content, null));
-    }
+    /// <summary>The content of an archive object and of everything inside it, for each name under which the object was seen.</summary>
+    public IEnumerable<SeenContent> Sighted(string objectSha) =>
+        SightingsOf(objectSha).SelectMany(sighting => Expand(objectSha, sighting)
+            .Select(content => new SeenContent(content, new Origin(sighting.Inbox, sighting.FirstSeen, sighting.Stamp))));
 
-    private IEnumerable<ArrivalContent> ArchivedContents(string objectSha, string path) =>
-        ArrivalContent.Expand(decoders, objectSha, path, archive.Read(objectSha))
-            .Where(content => KeptIn(content.Sha) is not { } kept || kept == objectSha);
+    /// <summary>The content of an archive object and of the arrivals inside it that are kept nowhere else.</summary>
+    public IEnumerable<SeenContent> Kept(string objectSha) =>
+        Expand(objectSha, SightingsOf(objectSha)[0])
+            .Where(content => KeptIn(content.Sha) is not { } kept || kept == objectSha)
+            .Select(content => new SeenContent(content, null));
+
+    private IReadOnlyList<Sighting> SightingsOf(string sha) => store.Read(session => session.Sightings.Of(sha));
+
+    private IEnumerable<ArrivalContent> Expand(string objectSha, Sighting sighting) =>
+        ArrivalContent.Expand(decoders, objectSha, sighting.Path, archive.Read(objectSha));
 
     private string? KeptIn(string sha) => store.Read(session => session.Arrivals.Get(sha))?.ObjectSha;
 }

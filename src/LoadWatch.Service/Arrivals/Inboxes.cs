@@ -2,10 +2,11 @@ using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Files;
+using LoadWatch.Storage.Recordings;
 
 namespace LoadWatch.Service.Arrivals;
 
-/// <summary>Finds the files that a sweep has to look into: all that are new or whose stamp differs from the one they were taken with.</summary>
+/// <summary>Finds the files that a sweep has to look into: all that are new or whose stamp differs from the one they were taken with, and all that are still to go.</summary>
 public static class Inboxes
 {
     /// <summary>Changed files in the order of the inboxes and their paths.</summary>
@@ -25,7 +26,7 @@ public static class Inboxes
             foreach (var file in files)
             {
                 // No stamp: gone again, or a pipe or link that intake never takes.
-                if (SafeFile.StampOf(file.FullPath) is { } stamp && !(known.TryGetValue(file.Path, out var last) && last.Stamp == stamp))
+                if (SafeFile.StampOf(file.FullPath) is { } stamp && (IsToGo(inbox) || !IsTaken(known, file, stamp)))
                 {
                     changed.Add((file, stamp));
                 }
@@ -63,4 +64,10 @@ public static class Inboxes
             File.SetUnixFileMode(folder, File.GetUnixFileMode(inbox));
         }
     }
+
+    /// <summary>What still stands in such an inbox is taken again, known or not: the process may have ended between its effects and its removal.</summary>
+    private static bool IsToGo(Inbox inbox) => inbox.Take == TakeMode.Move;
+
+    private static bool IsTaken(IReadOnlyDictionary<string, Sighting> known, FoundFile file, FileStamp stamp) =>
+        known.TryGetValue(file.Path, out var last) && last.Stamp == stamp;
 }

@@ -66,7 +66,7 @@ public static class PeopleCommand
                 line.DaysSinceHeavyOrFastLegs is { } days ? FormattableString.Invariant($"{days} days") : "?");
         }
 
-        AnsiConsole.Write(table);
+        TableOutput.Write(table);
         Console.Out.WriteLine(
             "last: last recording. week: load of 7 days. ratio: against the 21 days before. known: share of 28 days with known load. "
             + "legs: since the last heavy or fast leg work. ?: unknown.");

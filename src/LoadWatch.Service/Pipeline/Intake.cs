@@ -38,7 +38,7 @@ public sealed class Intake(
         KillPoint.Pass("archived");
         store.Write(session => RecordWaiting(session, taken));
         KillPoint.Pass("waiting");
-        settlement.Settle(Contents(taken), force: false);
+        settlement.Settle(Contents(taken.Where(IsHarmless)), force: false);
         KillPoint.Pass("settled");
         foreach (var file in taken.Where(file => file.File.Inbox.Take == TakeMode.Move))
         {
@@ -55,10 +55,13 @@ public sealed class Intake(
         }
     }
 
-    private List<SeenContent> Contents(List<TakenFile> taken) =>
+    private bool IsHarmless(TakenFile file) =>
+        store.Read(session => session.Arrivals.Get(file.Copy.Sha)) is not { } known || !Recovery.IsPoisonous(known);
+
+    private List<SeenContent> Contents(IEnumerable<TakenFile> taken) =>
         taken.AsParallel().AsOrdered()
             .SelectMany(file => ArrivalContent.Expand(decoders, file.Copy.Sha, file.File.Path, file.Copy.Bytes)
-                .Select(content => new SeenContent(content, file)))
+                .Select(content => new SeenContent(content, new Origin(file.File.Inbox.Name, now, file.Stamp))))
             .ToList();
 
     private static IEnumerable<List<FoundFile>> Groups(IReadOnlyList<(FoundFile File, FileStamp Stamp)> files)

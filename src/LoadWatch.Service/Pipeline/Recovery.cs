@@ -15,6 +15,9 @@ public sealed class Recovery(Store store, Archive archive, ArchiveReader reader,
 {
     private const int MostAttempts = 3;
 
+    /// <summary>Whether the arrival was refused because it ends the process that decodes it: no process but a child may touch it again.</summary>
+    public static bool IsPoisonous(Arrival arrival) => arrival.State == ArrivalState.Refused && arrival.Attempts >= MostAttempts;
+
     public void Run(CancellationToken cancel)
     {
         foreach (var arrival in store.Read(session => session.Arrivals.Waiting()))
@@ -30,7 +33,7 @@ public sealed class Recovery(Store store, Archive archive, ArchiveReader reader,
         {
             if (probe.Survives(archive.PathOf(arrival.ObjectSha), arrival.Size))
             {
-                settlement.Settle(reader.Contents(arrival.ObjectSha).ToList(), force: false);
+                settlement.Settle(reader.Sighted(arrival.ObjectSha).ToList(), force: false);
                 return;
             }
 

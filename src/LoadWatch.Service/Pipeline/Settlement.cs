@@ -3,12 +3,11 @@ using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Recordings;
-using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
 
 /// <summary>Decides what becomes of contents and commits all effects of a group at once: states, recordings, activities, dirty dates (I-3, I-4).</summary>
-public sealed class Settlement(WorkingConfiguration configuration, Store store, ArrivalDecoder decoder, Instant now, SweepReport report)
+public sealed class Settlement(WorkingConfiguration configuration, Store store, ArrivalDecoder decoder, SweepReport report)
 {
     /// <param name="force">Decode and judge again even where nothing about the arrival changed.</param>
     public void Settle(IReadOnlyList<SeenContent> seen, bool force)
@@ -54,14 +53,14 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
         _ => false,
     };
 
-    private void RecordMembers(StoreSession session, IReadOnlyList<SeenContent> seen)
+    private static void RecordMembers(StoreSession session, IReadOnlyList<SeenContent> seen)
     {
         foreach (var (content, origin) in seen.Where(item => item.Content.ParentSha is not null))
         {
             session.Arrivals.AddWaiting(content.Sha, content.ParentSha, content.ParentSha!, content.Bytes.Length);
             if (origin is not null)
             {
-                session.Sightings.Upsert(origin.File.Inbox.Name, content.Path, content.Sha, now, origin.Stamp);
+                session.Sightings.Upsert(origin.Inbox, content.Path, content.Sha, origin.FirstSeen, origin.Stamp);
             }
         }
     }

@@ -30,7 +30,7 @@ public sealed class Sweep
         var decoders = new DecoderSet(configuration.Layouts);
         var decoder = new ArrivalDecoder(configuration, decoders, archive, now);
         reader = new ArchiveReader(store, archive, decoders);
-        settlement = new Settlement(configuration, store, decoder, now, Report);
+        settlement = new Settlement(configuration, store, decoder, Report);
         intake = new Intake(configuration, store, archive, decoders, settlement, now, Report);
         recovery = new Recovery(store, archive, reader, settlement, probe);
         briefs = new Briefs(configuration, now);
@@ -52,7 +52,11 @@ public sealed class Sweep
     public SweepReport Rebuild(CancellationToken cancel, Action<int, int>? progress = null)
     {
         recovery.Run(cancel);
-        var objects = store.Read(session => session.Arrivals.All()).Select(arrival => arrival.ObjectSha).Distinct(StringComparer.Ordinal).ToList();
+        var objects = store.Read(session => session.Arrivals.All())
+            .Where(arrival => !Recovery.IsPoisonous(arrival))
+            .Select(arrival => arrival.ObjectSha)
+            .Distinct(StringComparer.Ordinal)
+            .ToList();
         store.Write(session =>
         {
             session.Derived.Empty();
@@ -62,7 +66,7 @@ public sealed class Sweep
         foreach (var group in objects.Chunk(ObjectsInOneCommit))
         {
             cancel.ThrowIfCancellationRequested();
-            settlement.Settle(group.SelectMany(reader.Contents).ToList(), force: true);
+            settlement.Settle(group.SelectMany(reader.Kept).ToList(), force: true);
             done += group.Length;
             progress?.Invoke(done, objects.Count);
         }

@@ -24,6 +24,9 @@ internal static class RealFiles
         return Known[name];
     }
 
+    /// <summary>Full paths of all files; empty where there are none.</summary>
+    public static IReadOnlyList<string> Paths => [.. Known.Keys.Order(StringComparer.Ordinal).Select(name => Path.Combine(Folder!, "files", name))];
+
     public static byte[] Bytes(string name) => File.ReadAllBytes(Path.Combine(Folder!, "files", name));
 
     private static string? Find()

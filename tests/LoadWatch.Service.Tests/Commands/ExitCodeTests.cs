@@ -1,0 +1,70 @@
+using LoadWatch.Service.Commands;
+using LoadWatch.Service.Tests.Pipeline;
+
+namespace LoadWatch.Service.Tests.Commands;
+
+public sealed class ExitCodeTests : IDisposable
+{
+    private readonly WorkingFolder folder = new();
+
+    public void Dispose() => folder.Dispose();
+
+    [Fact]
+    public void ASecondInstanceEndsWith75AndNamesTheLock()
+    {
+        using var first = Workplace.OpenToWork(folder.ConfigPath);
+        var second = Loadwatch.Run("sweep", "--config", folder.ConfigPath);
+        Assert.Equal((75, ""), (second.Code, second.Output));
+        Assert.Contains(Path.Combine(folder.Data, "loadwatch.lock"), second.Errors, StringComparison.Ordinal);
+        Assert.Contains($"process {Environment.ProcessId} ", second.Errors, StringComparison.Ordinal);
+        Assert.Equal(0, Loadwatch.Run("export", "arrivals", "--config", folder.ConfigPath).Code);
+    }
+
+    [Theory]
+    [InlineData("sweep", "--no-such-option")]
+    [InlineData("swep")]
+    [InlineData("export", "everything")]
+    [InlineData("sweep", "--as-of", "yesterday")]
+    public void AWrongCommandLineEndsWith64(params string[] words)
+    {
+        var ended = Loadwatch.Run(words);
+        Assert.Equal((64, ""), (ended.Code, ended.Output));
+        Assert.Contains("--help", ended.Errors, StringComparison.Ordinal);
+        Assert.Contains(words[^1], ended.Errors, StringComparison.Ordinal);
+    }
+
+    [Theory]
+    [InlineData("roster.csv", "person,name,group,birth_year,sex,time_zone\nanna,Anna,squad,,,\nbo,Bo,squid,,,\n", "roster.csv:3: ")]
+    [InlineData("anchors.csv", "person,date,anchor,value,unit,source,exercise\nanna,,heart_rate_max,1900,bpm,,\n", "anchors.csv:2: ")]
+    [InlineData("loadwatch.json", "{\n  \"time_zone\": \"UTC\",\n  \"inboxs\": []\n}\n", "loadwatch.json:3: ")]
+    public void AWrongConfigurationEndsWith78AndNamesFileAndLine(string file, string text, string place)
+    {
+        folder.Write(file, text);
+        var ended = Loadwatch.Run("sweep", "--config", folder.ConfigPath);
+        Assert.Equal((78, ""), (ended.Code, ended.Output));
+        Assert.Contains(place, ended.Errors, StringComparison.Ordinal);
+        Assert.False(Directory.Exists(folder.Data), "nothing is touched before the configuration is right");
+    }
+
+    [Fact]
+    public void ASweepEndsWith0WhateverItRefused()
+    {
+        folder.Put("anna/cut.fit", Some.Fit(Some.Yesterday)[..200]);
+        folder.Put("anna/notes.txt", Some.Text("felt fine\n"));
+        folder.Put("nobody.fit", Some.Fit(Some.Yesterday));
+        var ended = Loadwatch.Run("sweep", "--config", folder.ConfigPath, "--as-of", WorkingFolder.NowText);
+        Assert.Equal((0, ""), (ended.Code, ended.Errors));
+        Assert.StartsWith("3 files seen: 0 stored, 0 aside, 1 held, 2 refused, 0 still settling", ended.Output, StringComparison.Ordinal);
+        Assert.Contains(Path.Combine(folder.Root, "pages", "staff.html"), ended.Output, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void ADatabaseOfSomebodyElseEndsWith65()
+    {
+        Directory.CreateDirectory(folder.Data);
+        File.WriteAllText(Path.Combine(folder.Data, "loadwatch.db"), new string('x', 8192));
+        var ended = Loadwatch.Run("sweep", "--config", folder.ConfigPath);
+        Assert.True(ended.Code == 65, ended.Errors);
+        Assert.DoesNotContain("   at ", ended.Errors, StringComparison.Ordinal);
+    }
+}
