@@ -106,7 +106,7 @@ public static class AnchorsReader
         {
             faults.Add(row.Fault($"value: \"{text}\" is not a number with a decimal point"));
         }
-        else if (value < kind.Lowest || value > kind.Highest)
+        else if (!(value >= kind.Lowest && value <= kind.Highest))
         {
             faults.Add(row.Fault(FormattableString.Invariant(
                 $"value: {value} {kind.Unit} is outside {kind.Lowest} to {kind.Highest} for {kind.Name}")));
