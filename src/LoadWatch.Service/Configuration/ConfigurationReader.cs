@@ -1,10 +1,10 @@
 using System.Security.Cryptography;
 using System.Text;
 using System.Text.Json;
-using System.Text.Json.Nodes;
 using LoadWatch.Activities;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
+using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Stimulus;
 using NodaTime;
@@ -33,7 +33,7 @@ public sealed class ConfigurationReader
 
     private WorkingConfiguration Read()
     {
-        var json = Bytes(path, name);
+        var json = WithoutMark(Bytes(path, name));
         var file = Parse(json);
         var zone = Zone(file.TimeZone, "$.time_zone") ?? MachineZone.Get();
         var exercises = Regions(file.Computation.Exercises, DefaultRegions.Exercises, "$.computation.exercises");
@@ -48,13 +48,13 @@ public sealed class ConfigurationReader
         };
         var groups = Groups(file, json);
         CheckLayouts(file.Layouts);
+        var inboxes = Inboxes(file);
         Stop();
 
-        var people = RosterReader.Read(Resolve(file.Roster), file.Roster, groups.Keys.ToList(), zone)
-            .ToDictionary(person => person.Id, StringComparer.OrdinalIgnoreCase);
-        var anchors = AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList());
-        var contacts = Contacts(file, groups, people, zone);
-        var inboxes = Inboxes(file);
+        var roster = Collect(() => RosterReader.Read(Resolve(file.Roster), file.Roster, groups.Keys.ToList(), zone));
+        var people = (roster ?? []).ToDictionary(person => person.Id, StringComparer.OrdinalIgnoreCase);
+        var anchors = Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList()));
+        var contacts = Contacts(file, groups, roster is null ? null : people, zone);
         Stop();
 
         var (hash, text) = Version(json, file);
@@ -68,7 +68,7 @@ public sealed class ConfigurationReader
             people,
             groups,
             contacts,
-            new AnchorBook(anchors),
+            new AnchorBook(anchors!),
             inboxes,
             [.. file.Layouts, BuiltInLayouts.Samples],
             computation,
@@ -83,12 +83,13 @@ public sealed class ConfigurationReader
         {
             places = JsonPlaces.Of(json);
             using var document = JsonDocument.Parse(json, ConfigurationJson.DocumentOptions);
-            faults.AddRange(KeyCheck.UnknownKeys(name, document.RootElement, typeof(LoadWatchFile), places));
+            faults.AddRange(KeyCheck.Faults(name, document.RootElement, typeof(LoadWatchFile), places));
             Stop();
             var file = JsonSerializer.Deserialize<LoadWatchFile>(json, ConfigurationJson.Options)
                 ?? throw new ConfigurationException(name, "holds null where an object is wanted");
             faults.AddRange(RangeCheck.Faults(file).Select(fault => Fault(fault.Path, fault.Reason)));
             Stop();
+            CheckLimits(file.Limits, "$.limits");
             return file;
         }
         catch (JsonException e)
@@ -108,18 +109,17 @@ public sealed class ConfigurationReader
     private Dictionary<string, Group> Groups(LoadWatchFile file, byte[] json)
     {
         using var document = JsonDocument.Parse(json, ConfigurationJson.DocumentOptions);
-        var common = LimitsNode(document.RootElement);
-        var entries = document.RootElement.TryGetProperty("groups", out var list) ? list.EnumerateArray().ToList() : [];
+        var limits = LimitsMerge.OfGroups(document.RootElement);
         var groups = new Dictionary<string, Group>(StringComparer.Ordinal);
         foreach (var (entry, i) in file.Groups.Select((entry, i) => (entry, i)))
         {
-            var limits = Merge(common.DeepClone().AsObject(), entries.Count > i ? LimitsNode(entries[i]) : []);
-            var group = new Group(
-                entry.Id,
-                entry.Name.Length > 0 ? entry.Name : entry.Id,
-                entry.LoadQuantity,
-                limits.Deserialize<RuleLimits>(ConfigurationJson.Options)!);
-            if (!groups.TryAdd(entry.Id, group))
+            CheckWords([entry.LoadQuantity], QuantityNames.All, $"$.groups[{i}].load_quantity", "a quantity");
+            if (entry.Limits is not null)
+            {
+                CheckLimits(limits[i], $"$.groups[{i}].limits");
+            }
+
+            if (!groups.TryAdd(entry.Id, new Group(entry.Id, entry.Name.Length > 0 ? entry.Name : entry.Id, entry.LoadQuantity, limits[i])))
             {
                 faults.Add(Fault($"$.groups[{i}].id", $"the group \"{entry.Id}\" stands above already"));
             }
@@ -128,27 +128,26 @@ public sealed class ConfigurationReader
         return groups;
     }
 
-    private static JsonObject LimitsNode(JsonElement owner) =>
-        owner.TryGetProperty("limits", out var limits) && limits.ValueKind == JsonValueKind.Object ? JsonObject.Create(limits)! : [];
-
-    private static JsonObject Merge(JsonObject under, JsonObject over)
-    {
-        foreach (var (key, value) in over)
-        {
-            under[key] = value is JsonObject inner && under[key] is JsonObject below ? Merge(below, inner) : value?.DeepClone();
-        }
-
-        return under;
-    }
+    private void CheckLimits(RuleLimits limits, string at) =>
+        faults.AddRange(LimitsCheck.Faults(limits).Select(fault => Fault($"{at}.{fault.Path}", fault.Reason)));
 
     private List<Contact> Contacts(
-        LoadWatchFile file, Dictionary<string, Group> groups, Dictionary<string, Person> people, DateTimeZone zone)
+        LoadWatchFile file, Dictionary<string, Group> groups, Dictionary<string, Person>? people, DateTimeZone zone)
     {
         var contacts = new List<Contact>();
         foreach (var (entry, i) in file.Contacts.Select((entry, i) => (entry, i)))
         {
             CheckWords(entry.Groups, groups.Keys, $"$.contacts[{i}].groups", "a group");
-            CheckWords(entry.People, people.Keys, $"$.contacts[{i}].people", "in the roster");
+            if (people is not null)
+            {
+                CheckWords(entry.People, people.Keys, $"$.contacts[{i}].people", "in the roster", StringComparer.OrdinalIgnoreCase);
+            }
+
+            if (entry.BriefDays.Count == 0)
+            {
+                faults.Add(Fault($"$.contacts[{i}].brief_days", "names no weekday"));
+            }
+
             if (contacts.Exists(contact => string.Equals(contact.Id, entry.Id, StringComparison.OrdinalIgnoreCase)))
             {
                 faults.Add(Fault($"$.contacts[{i}].id", $"the contact \"{entry.Id}\" stands above already"));
@@ -182,6 +181,11 @@ public sealed class ConfigurationReader
             {
                 faults.Add(Fault($"$.inboxes[{i}].path", $"the folder \"{file.Inboxes[i].Path}\" is not there"));
             }
+
+            // What the service writes would come in again as new files.
+            faults.AddRange(new[] { file.Data, file.Pages, file.Notices }
+                .Where(written => IsWithin(Resolve(written), entry.Path))
+                .Select(written => Fault($"$.inboxes[{i}].path", $"the folder \"{written}\" lies in this inbox: LoadWatch writes there")));
         }
 
         return inboxes;
@@ -202,9 +206,9 @@ public sealed class ConfigurationReader
 
     private IReadOnlyList<double> Ascending(IReadOnlyList<double> bounds, string at)
     {
-        if (bounds.Zip(bounds.Skip(1)).Any(pair => pair.First >= pair.Second))
+        if (bounds.Prepend(0).Zip(bounds).Any(pair => pair.First >= pair.Second))
         {
-            faults.Add(Fault(at, "the bounds must rise"));
+            faults.Add(Fault(at, "the bounds must rise, the first from above 0"));
         }
 
         return bounds;
@@ -218,11 +222,11 @@ public sealed class ConfigurationReader
         }
     }
 
-    private void CheckWords(IEnumerable<string> words, IEnumerable<string> known, string at, string what)
+    private void CheckWords(IEnumerable<string> words, IEnumerable<string> known, string at, string what, StringComparer? comparer = null)
     {
         var list = known.ToList();
         faults.AddRange(words
-            .Where(word => !list.Contains(word, StringComparer.OrdinalIgnoreCase))
+            .Where(word => !list.Contains(word, comparer ?? StringComparer.Ordinal))
             .Select(word => Fault(at, $"\"{word}\" is not {what}{Nearest.Hint(word, list)}")));
     }
 
@@ -247,15 +251,33 @@ public sealed class ConfigurationReader
         var text = string.Join(
             '\n',
             Encoding.UTF8.GetString(json),
-            Encoding.UTF8.GetString(Bytes(Resolve(file.Roster), file.Roster)),
-            Encoding.UTF8.GetString(Bytes(Resolve(file.Anchors), file.Anchors)));
+            TableFile.TextOf(Resolve(file.Roster), file.Roster),
+            TableFile.TextOf(Resolve(file.Anchors), file.Anchors));
         return (Convert.ToHexStringLower(SHA256.HashData(Encoding.UTF8.GetBytes(text))), text);
     }
 
     private ConfigurationFault Fault(string at, string reason) =>
         new(name, places.LineOf(at), at.Length > 2 ? $"{at[2..]}: {reason}" : reason);
 
+    private static bool IsWithin(string inner, string outer) =>
+        System.IO.Path.GetRelativePath(outer, inner) is var way
+        && way != ".." && !way.StartsWith($"..{System.IO.Path.DirectorySeparatorChar}", StringComparison.Ordinal) && !System.IO.Path.IsPathRooted(way);
+
     private string Resolve(string relative) => System.IO.Path.GetFullPath(System.IO.Path.Combine(folder, relative));
+
+    private T? Collect<T>(Func<T> read)
+        where T : class
+    {
+        try
+        {
+            return read();
+        }
+        catch (ConfigurationException e)
+        {
+            faults.AddRange(e.Faults);
+            return null;
+        }
+    }
 
     private void Stop()
     {
@@ -264,6 +286,8 @@ public sealed class ConfigurationReader
             throw new ConfigurationException([.. faults]);
         }
     }
+
+    private static byte[] WithoutMark(byte[] bytes) => bytes is [0xEF, 0xBB, 0xBF, .. var rest] ? rest : bytes;
 
     private static byte[] Bytes(string path, string name)
     {
