@@ -36,21 +36,32 @@ public static class Inboxes
     }
 
     /// <summary>Makes one sub-folder per person in every inbox that can be written, so that a new user sees where files go.</summary>
-    public static void MakePersonFolders(WorkingConfiguration configuration)
+    /// <returns>The folders that were made.</returns>
+    public static IReadOnlyList<string> MakePersonFolders(WorkingConfiguration configuration)
     {
+        var made = new List<string>();
         foreach (var inbox in configuration.Inboxes.Where(inbox => Directory.Exists(inbox.Path)))
         {
             try
             {
-                foreach (var person in configuration.People.Values)
-                {
-                    Directory.CreateDirectory(Path.Combine(inbox.Path, person.Id));
-                }
+                made.AddRange(Missing(inbox, configuration).Select(folder => Directory.CreateDirectory(folder).FullName));
             }
             catch (Exception e) when (e is IOException or UnauthorizedAccessException)
             {
                 // A read-only share: its owner makes the folders.
             }
         }
+
+        return made;
+    }
+
+    /// <summary>A folder written in another case is the person's folder too.</summary>
+    private static List<string> Missing(Inbox inbox, WorkingConfiguration configuration)
+    {
+        var there = Directory.EnumerateDirectories(inbox.Path).Select(Path.GetFileName).ToHashSet(StringComparer.OrdinalIgnoreCase);
+        return configuration.People.Values
+            .Where(person => !there.Contains(person.Id))
+            .Select(person => Path.Combine(inbox.Path, person.Id))
+            .ToList();
     }
 }
