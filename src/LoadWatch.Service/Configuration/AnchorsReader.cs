@@ -90,7 +90,7 @@ public static class AnchorsReader
             return source;
         }
 
-        faults.Add(row.Fault($"source: \"{word}\" is not measured, observed or estimated{Nearest.Hint(word, Enum.GetNames<AnchorSource>())}"));
+        faults.Add(row.Fault($"source: \"{word}\" is not measured, observed or estimated{Nearest.Hint(word, ValueCheck.WordsOf(typeof(AnchorSource)))}"));
         return AnchorSource.Measured;
     }
 

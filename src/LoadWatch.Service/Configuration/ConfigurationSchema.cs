@@ -4,6 +4,7 @@ using System.Text.Encodings.Web;
 using System.Text.Json;
 using System.Text.Json.Nodes;
 using System.Text.Json.Schema;
+using LoadWatch.Findings;
 
 namespace LoadWatch.Service.Configuration;
 
@@ -23,9 +24,17 @@ public static class ConfigurationSchema
     public static string Write()
     {
         var schema = ConfigurationJson.Options.GetJsonSchemaAsNode(typeof(LoadWatchFile), Exporter).AsObject();
+        WriteOutLimits(schema["properties"]!["limits"]!.AsObject());
         schema.Insert(0, "$schema", "https://json-schema.org/draft/2020-12/schema");
         schema.Insert(1, "title", "loadwatch.json");
         return schema.ToJsonString(Writing) + "\n";
+    }
+
+    /// <summary>The exporter points from the common limits to those of a group, which have no defaults.</summary>
+    private static void WriteOutLimits(JsonObject limits)
+    {
+        var whole = ConfigurationJson.Options.GetJsonSchemaAsNode(typeof(RuleLimits), Exporter);
+        limits["properties"] = whole["properties"]!.DeepClone();
     }
 
     private static JsonNode Complete(JsonSchemaExporterContext context, JsonNode node)
