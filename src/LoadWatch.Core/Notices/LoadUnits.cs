@@ -2,8 +2,8 @@ using LoadWatch.Loads;
 
 namespace LoadWatch.Notices;
 
-/// <summary>The unit that stands over a column of loads.</summary>
-internal static class LoadUnits
+/// <summary>The unit of a group's load, in texts and over columns.</summary>
+public static class LoadUnits
 {
     /// <summary>The unit of a built-in quantity; for any other its name in words.</summary>
     public static string Of(string quantity) => quantity switch

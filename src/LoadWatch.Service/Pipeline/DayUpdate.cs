@@ -1,5 +1,6 @@
 using LoadWatch.Days;
 using LoadWatch.Findings;
+using LoadWatch.Notices;
 using LoadWatch.People;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
@@ -53,7 +54,7 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
         var through = LastDateOver(person, now);
         var activities = store.Read(session => session.Activities.OfPerson(person.Id)).Select(activity => OnDay(activity, group)).ToList();
         var days = LoadCalendar.Build(person.Id, activities, through);
-        var findings = RuleBook.Evaluate(person, days, group.Limits);
+        var findings = RuleBook.Evaluate(person, days, group.Limits, LoadUnits.Of(group.LoadQuantity));
         return new ComputedSeries(
             person.Id,
             from,
