@@ -16,6 +16,9 @@ public sealed class RosterReaderTests
     [InlineData("anna,Anna,squad,,,Europe/Helsinky", """time_zone: "Europe/Helsinky" is not an IANA time zone; did you mean "Europe/Helsinki"?""")]
     [InlineData("an/na,Anna,squad,,,", """person: "an/na" may hold letters, digits, - _ and . only, 60 at most, since it names a folder""")]
     [InlineData(".anna,Anna,squad,,,", """person: ".anna" may hold letters, digits, - _ and . only, 60 at most, since it names a folder""")]
+    [InlineData("Con,Anna,squad,,,", """person: "Con" cannot name a folder on Windows""")]
+    [InlineData("lpt1.a,Anna,squad,,,", """person: "lpt1.a" cannot name a folder on Windows""")]
+    [InlineData("anna.,Anna,squad,,,", """person: "anna." cannot name a folder on Windows""")]
     [InlineData(",Anna,squad,,,", """person: "" may hold letters, digits, - _ and . only, 60 at most, since it names a folder""")]
     [InlineData("anna,Anna,squad,,,,surplus", "7 cells for 6 columns: a cell with a separator in it stands in quotes")]
     public void AMistakeInARowIsToldWithItsLine(string row, string fault) =>
@@ -81,6 +84,14 @@ public sealed class RosterReaderTests
 
         Assert.Equal("Änna Öyvä", folder.Read().People["anna"].Name);
     }
+
+    [Theory]
+    [InlineData("conny")]
+    [InlineData("a.con")]
+    [InlineData("anna.b-2_x")]
+    [InlineData("Åse")]
+    public void OtherIdsAreTaken(string id) =>
+        Assert.Equal(["anna", id], ConfigurationFolder.With("roster.csv", $"{Header}anna,Anna,squad,,,\n{id},Anna,squad,,,\n").People.Keys);
 
     [Fact]
     public void PeopleAreFoundInAnyCase() => Assert.Equal("anna", ConfigurationFolder.With("loadwatch.json", """
