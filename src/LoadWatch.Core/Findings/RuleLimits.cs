@@ -1,14 +1,18 @@
 using System.ComponentModel.DataAnnotations;
+using System.Text.Json.Serialization;
 
 namespace LoadWatch.Findings;
 
 /// <summary>The limits of the rules, each at its default. A group may set its own.</summary>
 public sealed record RuleLimits
 {
+    /// <summary>Acute load well above the usual.</summary>
     public LoadRatioLimits LoadRatio { get; init; } = new();
 
+    /// <summary>Too long without heavy or fast work of a body region.</summary>
     public StimulusGapLimits StimulusGap { get; init; } = new();
 
+    /// <summary>Expected recordings did not come.</summary>
     public SilenceLimits Silence { get; init; } = new();
 }
 
@@ -29,10 +33,12 @@ public sealed record LoadRatioLimits
 
     /// <summary>Days with known load wanted among the last 7. A choice. Days.</summary>
     [Range(5, 7)]
+    [JsonPropertyName("covered_of_7")]
     public int CoveredOf7 { get; init; } = 5;
 
     /// <summary>Days with known load wanted among the last 28. A choice. Days.</summary>
     [Range(22, 28)]
+    [JsonPropertyName("covered_of_28")]
     public int CoveredOf28 { get; init; } = 22;
 
     /// <summary>The chronic load must exceed this share of its own median over 12 months: no ratio over a near-empty month. A choice. 0 to 1.</summary>

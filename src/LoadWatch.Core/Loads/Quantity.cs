@@ -32,4 +32,7 @@ public static class QuantityNames
 
     /// <summary>Kilograms times repetitions over all working sets, kilograms (kg).</summary>
     public const string Kilograms = "kilograms";
+
+    /// <summary>Every quantity that a group's load may be.</summary>
+    public static IReadOnlyList<string> All { get; } = [BanisterTrimp, EdwardsLoad, Minutes, Distance, Work, Sets, Repetitions, Kilograms];
 }

@@ -2,7 +2,7 @@ using LoadWatch.Loads;
 
 namespace LoadWatch.Notices;
 
-/// <summary>The unit that stands over a column of loads.</summary>
+/// <summary>The unit of a group's load, in texts and over columns.</summary>
 public static class LoadUnits
 {
     /// <summary>The unit of a built-in quantity; for any other its name in words.</summary>

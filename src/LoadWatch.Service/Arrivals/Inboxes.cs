@@ -37,15 +37,17 @@ public static class Inboxes
     }
 
     /// <summary>Makes one sub-folder per person in every inbox that can be written, so that a new user sees where files go.</summary>
-    public static void MakePersonFolders(WorkingConfiguration configuration)
+    /// <returns>The folders that were made.</returns>
+    public static IReadOnlyList<string> MakePersonFolders(WorkingConfiguration configuration)
     {
+        var made = new List<string>();
         foreach (var inbox in configuration.Inboxes.Where(inbox => Directory.Exists(inbox.Path)))
         {
             try
             {
-                foreach (var folder in configuration.People.Values.Select(person => Path.Combine(inbox.Path, person.Id)).Where(path => !Directory.Exists(path)))
+                foreach (var folder in Missing(inbox, configuration))
                 {
-                    Directory.CreateDirectory(folder);
+                    made.Add(Directory.CreateDirectory(folder).FullName);
                     LetInWhoMayDrop(inbox.Path, folder);
                 }
             }
@@ -54,6 +56,18 @@ public static class Inboxes
                 // A read-only share: its owner makes the folders.
             }
         }
+
+        return made;
+    }
+
+    /// <summary>A folder written in another case is the person's folder too.</summary>
+    private static List<string> Missing(Inbox inbox, WorkingConfiguration configuration)
+    {
+        var there = Directory.EnumerateDirectories(inbox.Path).Select(Path.GetFileName).ToHashSet(StringComparer.OrdinalIgnoreCase);
+        return configuration.People.Values
+            .Where(person => !there.Contains(person.Id))
+            .Select(person => Path.Combine(inbox.Path, person.Id))
+            .ToList();
     }
 
     /// <summary>This process keeps what it makes to itself (I-12); an inbox is for others, so its folders are as open as it is.</summary>

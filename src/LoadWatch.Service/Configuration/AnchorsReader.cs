@@ -90,7 +90,7 @@ public static class AnchorsReader
             return source;
         }
 
-        faults.Add(row.Fault($"source: \"{word}\" is not measured, observed or estimated{Nearest.Hint(word, Enum.GetNames<AnchorSource>())}"));
+        faults.Add(row.Fault($"source: \"{word}\" is not measured, observed or estimated{Nearest.Hint(word, ValueCheck.WordsOf(typeof(AnchorSource)))}"));
         return AnchorSource.Measured;
     }
 
@@ -106,7 +106,7 @@ public static class AnchorsReader
         {
             faults.Add(row.Fault($"value: \"{text}\" is not a number with a decimal point"));
         }
-        else if (value < kind.Lowest || value > kind.Highest)
+        else if (!(value >= kind.Lowest && value <= kind.Highest))
         {
             faults.Add(row.Fault(FormattableString.Invariant(
                 $"value: {value} {kind.Unit} is outside {kind.Lowest} to {kind.Highest} for {kind.Name}")));

@@ -1,14 +1,13 @@
 using System.Security.Cryptography;
 using System.Text;
 using System.Text.Json;
-using System.Text.Json.Nodes;
 using LoadWatch.Activities;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
+using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Stimulus;
 using NodaTime;
-using NodaTime.Text;
 
 namespace LoadWatch.Service.Configuration;
 
@@ -18,14 +17,14 @@ public sealed class ConfigurationReader
     private readonly string path;
     private readonly string folder;
     private readonly string name;
-    private readonly List<ConfigurationFault> faults = [];
-    private JsonPlaces places = null!;
+    private readonly FaultList faults;
 
     private ConfigurationReader(string path)
     {
         this.path = System.IO.Path.GetFullPath(path);
         folder = System.IO.Path.GetDirectoryName(this.path)!;
         name = System.IO.Path.GetFileName(path);
+        faults = new FaultList(name);
     }
 
     /// <exception cref="ConfigurationException">Names every fault with file, line and the nearest right word.</exception>
@@ -33,9 +32,9 @@ public sealed class ConfigurationReader
 
     private WorkingConfiguration Read()
     {
-        var json = Bytes(path, name);
+        var json = WithoutMark(Bytes(path, name));
         var file = Parse(json);
-        var zone = Zone(file.TimeZone, "$.time_zone") ?? MachineZone.Get();
+        var zone = faults.Zone(file.TimeZone, "$.time_zone") ?? MachineZone.Get();
         var exercises = Regions(file.Computation.Exercises, DefaultRegions.Exercises, "$.computation.exercises");
         var computation = new ComputationSettings
         {
@@ -48,14 +47,14 @@ public sealed class ConfigurationReader
         };
         var groups = Groups(file, json);
         CheckLayouts(file.Layouts);
-        Stop();
+        var inboxes = InboxesReader.Read(file, Resolve, faults);
+        faults.Stop();
 
-        var people = RosterReader.Read(Resolve(file.Roster), file.Roster, groups.Keys.ToList(), zone)
-            .ToDictionary(person => person.Id, StringComparer.OrdinalIgnoreCase);
-        var anchors = AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList());
-        var contacts = Contacts(file, groups, people, zone);
-        var inboxes = Inboxes(file);
-        Stop();
+        var roster = faults.Collect(() => RosterReader.Read(Resolve(file.Roster), file.Roster, groups.Keys.ToList(), zone));
+        var people = (roster ?? []).ToDictionary(person => person.Id, StringComparer.OrdinalIgnoreCase);
+        var anchors = faults.Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList()));
+        var contacts = ContactsReader.Read(file, groups, roster is null ? null : people, zone, faults);
+        faults.Stop();
 
         var (hash, text) = Version(json, file);
         return new WorkingConfiguration(
@@ -68,7 +67,7 @@ public sealed class ConfigurationReader
             people,
             groups,
             contacts,
-            new AnchorBook(anchors),
+            new AnchorBook(anchors!),
             inboxes,
             [.. file.Layouts, BuiltInLayouts.Samples],
             computation,
@@ -81,14 +80,19 @@ public sealed class ConfigurationReader
     {
         try
         {
-            places = JsonPlaces.Of(json);
+            var places = faults.Places = JsonPlaces.Of(json);
             using var document = JsonDocument.Parse(json, ConfigurationJson.DocumentOptions);
-            faults.AddRange(KeyCheck.UnknownKeys(name, document.RootElement, typeof(LoadWatchFile), places));
-            Stop();
+            faults.AddRange(KeyCheck.Faults(name, document.RootElement, typeof(LoadWatchFile), places));
+            faults.Stop();
             var file = JsonSerializer.Deserialize<LoadWatchFile>(json, ConfigurationJson.Options)
                 ?? throw new ConfigurationException(name, "holds null where an object is wanted");
-            faults.AddRange(RangeCheck.Faults(file).Select(fault => Fault(fault.Path, fault.Reason)));
-            Stop();
+            foreach (var (at, reason) in RangeCheck.Faults(file))
+            {
+                faults.Add(at, reason);
+            }
+
+            faults.Stop();
+            CheckLimits(file.Limits, "$.limits");
             return file;
         }
         catch (JsonException e)
@@ -108,83 +112,31 @@ public sealed class ConfigurationReader
     private Dictionary<string, Group> Groups(LoadWatchFile file, byte[] json)
     {
         using var document = JsonDocument.Parse(json, ConfigurationJson.DocumentOptions);
-        var common = LimitsNode(document.RootElement);
-        var entries = document.RootElement.TryGetProperty("groups", out var list) ? list.EnumerateArray().ToList() : [];
+        var limits = LimitsMerge.OfGroups(document.RootElement);
         var groups = new Dictionary<string, Group>(StringComparer.Ordinal);
         foreach (var (entry, i) in file.Groups.Select((entry, i) => (entry, i)))
         {
-            var limits = Merge(common.DeepClone().AsObject(), entries.Count > i ? LimitsNode(entries[i]) : []);
-            var group = new Group(
-                entry.Id,
-                entry.Name.Length > 0 ? entry.Name : entry.Id,
-                entry.LoadQuantity,
-                limits.Deserialize<RuleLimits>(ConfigurationJson.Options)!);
-            if (!groups.TryAdd(entry.Id, group))
+            faults.CheckWords([entry.LoadQuantity], QuantityNames.All, $"$.groups[{i}].load_quantity", "a quantity");
+            if (entry.Limits is not null)
             {
-                faults.Add(Fault($"$.groups[{i}].id", $"the group \"{entry.Id}\" stands above already"));
+                CheckLimits(limits[i], $"$.groups[{i}].limits");
+            }
+
+            if (!groups.TryAdd(entry.Id, new Group(entry.Id, entry.Name.Length > 0 ? entry.Name : entry.Id, entry.LoadQuantity, limits[i])))
+            {
+                faults.Add($"$.groups[{i}].id", $"the group \"{entry.Id}\" stands above already");
             }
         }
 
         return groups;
     }
 
-    private static JsonObject LimitsNode(JsonElement owner) =>
-        owner.TryGetProperty("limits", out var limits) && limits.ValueKind == JsonValueKind.Object ? JsonObject.Create(limits)! : [];
-
-    private static JsonObject Merge(JsonObject under, JsonObject over)
+    private void CheckLimits(RuleLimits limits, string at)
     {
-        foreach (var (key, value) in over)
+        foreach (var (below, reason) in LimitsCheck.Faults(limits))
         {
-            under[key] = value is JsonObject inner && under[key] is JsonObject below ? Merge(below, inner) : value?.DeepClone();
+            faults.Add($"{at}.{below}", reason);
         }
-
-        return under;
-    }
-
-    private List<Contact> Contacts(
-        LoadWatchFile file, Dictionary<string, Group> groups, Dictionary<string, Person> people, DateTimeZone zone)
-    {
-        var contacts = new List<Contact>();
-        foreach (var (entry, i) in file.Contacts.Select((entry, i) => (entry, i)))
-        {
-            CheckWords(entry.Groups, groups.Keys, $"$.contacts[{i}].groups", "a group");
-            CheckWords(entry.People, people.Keys, $"$.contacts[{i}].people", "in the roster");
-            if (contacts.Exists(contact => string.Equals(contact.Id, entry.Id, StringComparison.OrdinalIgnoreCase)))
-            {
-                faults.Add(Fault($"$.contacts[{i}].id", $"the contact \"{entry.Id}\" stands above already"));
-            }
-
-            contacts.Add(new Contact(
-                entry.Id,
-                entry.Name.Length > 0 ? entry.Name : entry.Id,
-                entry.Role,
-                entry.Groups.Count > 0 ? entry.Groups : [.. groups.Keys],
-                entry.People,
-                Zone(entry.TimeZone, $"$.contacts[{i}].time_zone") ?? zone,
-                LocalTimePattern.CreateWithInvariantCulture("HH:mm").Parse(entry.BriefAt).Value,
-                entry.BriefDays.ToHashSet()));
-        }
-
-        return contacts;
-    }
-
-    private List<Inbox> Inboxes(LoadWatchFile file)
-    {
-        var inboxes = file.Inboxes.Select(entry => new Inbox(entry.Name, Resolve(entry.Path), entry.Take)).ToList();
-        foreach (var (entry, i) in inboxes.Select((entry, i) => (entry, i)))
-        {
-            if (inboxes.Take(i).Any(above => above.Name == entry.Name))
-            {
-                faults.Add(Fault($"$.inboxes[{i}].name", $"the inbox \"{entry.Name}\" stands above already"));
-            }
-
-            if (!Directory.Exists(entry.Path))
-            {
-                faults.Add(Fault($"$.inboxes[{i}].path", $"the folder \"{file.Inboxes[i].Path}\" is not there"));
-            }
-        }
-
-        return inboxes;
     }
 
     private Dictionary<string, IReadOnlyList<BodyRegion>> Regions(
@@ -193,7 +145,7 @@ public sealed class ConfigurationReader
         var all = shipped.ToDictionary(pair => pair.Key, pair => pair.Value, StringComparer.Ordinal);
         foreach (var (word, regions) in own)
         {
-            CheckWords(regions, BodyRegions.All.Select(BodyRegions.Word), $"{at}.{word}", "a body region");
+            faults.CheckWords(regions, BodyRegions.All.Select(BodyRegions.Word), $"{at}.{word}", "a body region");
             all[word] = regions.Select(BodyRegions.Parse).OfType<BodyRegion>().ToList();
         }
 
@@ -202,9 +154,9 @@ public sealed class ConfigurationReader
 
     private IReadOnlyList<double> Ascending(IReadOnlyList<double> bounds, string at)
     {
-        if (bounds.Zip(bounds.Skip(1)).Any(pair => pair.First >= pair.Second))
+        if (bounds.Prepend(0).Zip(bounds).Any(pair => pair.First >= pair.Second))
         {
-            faults.Add(Fault(at, "the bounds must rise"));
+            faults.Add(at, "the bounds must rise, the first from above 0");
         }
 
         return bounds;
@@ -214,32 +166,11 @@ public sealed class ConfigurationReader
     {
         foreach (var (layout, i) in layouts.Select((layout, i) => (layout, i)))
         {
-            faults.AddRange(layout.Validate().Select(reason => Fault($"$.layouts[{i}]", $"layout \"{layout.Name}\": {reason}")));
+            foreach (var reason in layout.Validate())
+            {
+                faults.Add($"$.layouts[{i}]", $"layout \"{layout.Name}\": {reason}");
+            }
         }
-    }
-
-    private void CheckWords(IEnumerable<string> words, IEnumerable<string> known, string at, string what)
-    {
-        var list = known.ToList();
-        faults.AddRange(words
-            .Where(word => !list.Contains(word, StringComparer.OrdinalIgnoreCase))
-            .Select(word => Fault(at, $"\"{word}\" is not {what}{Nearest.Hint(word, list)}")));
-    }
-
-    private DateTimeZone? Zone(string id, string at)
-    {
-        if (id.Length == 0)
-        {
-            return null;
-        }
-
-        var zone = DateTimeZoneProviders.Tzdb.GetZoneOrNull(id);
-        if (zone is null)
-        {
-            faults.Add(Fault(at, $"\"{id}\" is not an IANA time zone{Nearest.Hint(id, DateTimeZoneProviders.Tzdb.Ids)}"));
-        }
-
-        return zone;
     }
 
     private (string Hash, string Text) Version(byte[] json, LoadWatchFile file)
@@ -247,23 +178,14 @@ public sealed class ConfigurationReader
         var text = string.Join(
             '\n',
             Encoding.UTF8.GetString(json),
-            Encoding.UTF8.GetString(Bytes(Resolve(file.Roster), file.Roster)),
-            Encoding.UTF8.GetString(Bytes(Resolve(file.Anchors), file.Anchors)));
+            TableFile.TextOf(Resolve(file.Roster), file.Roster),
+            TableFile.TextOf(Resolve(file.Anchors), file.Anchors));
         return (Convert.ToHexStringLower(SHA256.HashData(Encoding.UTF8.GetBytes(text))), text);
     }
 
-    private ConfigurationFault Fault(string at, string reason) =>
-        new(name, places.LineOf(at), at.Length > 2 ? $"{at[2..]}: {reason}" : reason);
-
     private string Resolve(string relative) => System.IO.Path.GetFullPath(System.IO.Path.Combine(folder, relative));
 
-    private void Stop()
-    {
-        if (faults.Count > 0)
-        {
-            throw new ConfigurationException([.. faults]);
-        }
-    }
+    private static byte[] WithoutMark(byte[] bytes) => bytes is [0xEF, 0xBB, 0xBF, .. var rest] ? rest : bytes;
 
     private static byte[] Bytes(string path, string name)
     {

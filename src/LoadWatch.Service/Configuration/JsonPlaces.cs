@@ -7,6 +7,7 @@ namespace LoadWatch.Service.Configuration;
 public sealed class JsonPlaces
 {
     private readonly Dictionary<string, long> lines = new(StringComparer.Ordinal);
+    private readonly List<(string Path, string Key, long Line)> repeated = [];
 
     private JsonPlaces()
     {
@@ -14,6 +15,9 @@ public sealed class JsonPlaces
 
     /// <summary>Paths in the order of the text, each with its line from 1.</summary>
     public IEnumerable<KeyValuePair<string, long>> All => lines;
+
+    /// <summary>Keys that stand a second time in the same object, each with the line where it comes again.</summary>
+    public IReadOnlyList<(string Path, string Key, long Line)> Repeated => repeated;
 
     /// <exception cref="JsonException">The text is not JSON.</exception>
     public static JsonPlaces Of(byte[] utf8)
@@ -51,10 +55,15 @@ public sealed class JsonPlaces
             case JsonTokenType.StartObject:
                 while (reader.Read() && reader.TokenType == JsonTokenType.PropertyName)
                 {
-                    var inner = $"{path}.{reader.GetString()}";
-                    lines[inner] = LineAt(lineStarts, reader.TokenStartIndex);
+                    var key = reader.GetString()!;
+                    var line = LineAt(lineStarts, reader.TokenStartIndex);
+                    if (!lines.TryAdd($"{path}.{key}", line))
+                    {
+                        repeated.Add(($"{path}.{key}", key, line));
+                    }
+
                     reader.Read();
-                    Walk(ref reader, inner, lineStarts);
+                    Walk(ref reader, $"{path}.{key}", lineStarts);
                 }
 
                 break;

@@ -85,7 +85,9 @@ public sealed record GroupEntry
     /// <summary>The name that briefs show; blank shows the id.</summary>
     public string Name { get; init; } = "";
 
-    /// <summary>Name of the quantity that is this group's load.</summary>
+    /// <summary>
+    /// The quantity that is this group's load: banister_trimp, edwards_load, minutes, distance, work, sets, repetitions or kilograms.
+    /// </summary>
     public string LoadQuantity { get; init; } = "banister_trimp";
 
     /// <summary>Limits that differ from the common ones; only the keys that differ.</summary>
@@ -103,15 +105,16 @@ public sealed record ContactEntry
     /// <summary>The name that the brief shows; blank shows the id.</summary>
     public string Name { get; init; } = "";
 
+    /// <summary>What the contact is to the people watched.</summary>
     public ContactRole Role { get; init; } = ContactRole.Coach;
 
-    /// <summary>Ids of groups; blank for all of them.</summary>
+    /// <summary>Ids of groups; empty for all of them.</summary>
     public IReadOnlyList<string> Groups { get; init; } = [];
 
-    /// <summary>Ids of single people, instead of groups.</summary>
+    /// <summary>Ids of single people; where any is named, the brief is about them and not about groups.</summary>
     public IReadOnlyList<string> People { get; init; } = [];
 
-    /// <summary>Local time of the brief.</summary>
+    /// <summary>Local time of the brief, 00:00 to 23:59.</summary>
     [RegularExpression("^([01][0-9]|2[0-3]):[0-5][0-9]$", ErrorMessage = "is a time of day such as 06:30")]
     public string BriefAt { get; init; } = "06:30";
 

@@ -2,6 +2,7 @@ using System.Collections;
 using System.ComponentModel.DataAnnotations;
 using System.Reflection;
 using System.Text.Json;
+using System.Text.Json.Serialization;
 
 namespace LoadWatch.Service.Configuration;
 
@@ -18,7 +19,7 @@ public static class RangeCheck
                 continue;
             }
 
-            var name = $"{path}.{JsonNamingPolicy.SnakeCaseLower.ConvertName(property.Name)}";
+            var name = $"{path}.{KeyOf(property)}";
             foreach (var rule in property.GetCustomAttributes<ValidationAttribute>().Where(rule => !rule.IsValid(inner)))
             {
                 yield return (name, Reason(rule, inner));
@@ -30,6 +31,9 @@ public static class RangeCheck
             }
         }
     }
+
+    private static string KeyOf(PropertyInfo property) =>
+        property.GetCustomAttribute<JsonPropertyNameAttribute>()?.Name ?? JsonNamingPolicy.SnakeCaseLower.ConvertName(property.Name);
 
     private static IEnumerable<(string Path, string Reason)> Inner(object inner, string path) => inner switch
     {

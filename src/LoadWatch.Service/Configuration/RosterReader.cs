@@ -33,6 +33,10 @@ public static partial class RosterReader
         {
             faults.Add(row.Fault($"person: \"{id}\" may hold letters, digits, - _ and . only, 60 at most, since it names a folder"));
         }
+        else if (NotAFolderPattern().IsMatch(id))
+        {
+            faults.Add(row.Fault($"person: \"{id}\" cannot name a folder on Windows"));
+        }
 
         var group = row["group"] ?? "";
         if (!groups.Contains(group))
@@ -93,4 +97,9 @@ public static partial class RosterReader
 
     [GeneratedRegex(@"^[\p{L}\p{N}_-][\p{L}\p{N}_.-]{0,59}$", RegexOptions.ExplicitCapture, matchTimeoutMilliseconds: 1000)]
     private static partial Regex IdPattern();
+
+    /// <summary>Names of devices, with or without an ending, and names that end in a full stop, which Windows drops.</summary>
+    [GeneratedRegex(
+        @"^(con|prn|aux|nul|com[0-9]|lpt[0-9])(\.|$)|\.$", RegexOptions.ExplicitCapture | RegexOptions.IgnoreCase | RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 1000)]
+    private static partial Regex NotAFolderPattern();
 }

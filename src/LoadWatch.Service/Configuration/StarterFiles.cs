@@ -3,10 +3,16 @@ namespace LoadWatch.Service.Configuration;
 /// <summary>What <c>init</c> writes. The full list of keys is in <c>config/loadwatch.json</c>.</summary>
 public static class StarterFiles
 {
+    public const string Configuration = "loadwatch.json";
+    public const string Schema = "loadwatch.schema.json";
+
+    /// <summary>By name, to be written where there is no configuration yet.</summary>
     public static IReadOnlyDictionary<string, string> All { get; } = new Dictionary<string, string>(StringComparer.Ordinal)
     {
-        ["loadwatch.json"] = """
+        [Configuration] = $$"""
             {
+              "$schema": "./{{Schema}}",    // lets an editor complete the keys and show what they mean
+
               // Paths are relative to this file. Comments and trailing commas are fine.
               // Every key with its default: config/loadwatch.json of the program.
               "data": "data",          // archive of originals and database: back this up

@@ -32,8 +32,16 @@ public sealed class TableFile
             var headers = (reader.Headers ?? []).Select(header => header.Trim()).ToArray();
             CheckHeader(name, headers, required, optional);
             var rows = new List<TableRow>();
+            var faults = new List<ConfigurationFault>();
             while (reader.Read())
             {
+                if (Enumerable.Range(0, reader.FieldCount).Skip(headers.Length).Any(i => reader.GetString(i).Trim().Length > 0))
+                {
+                    faults.Add(new ConfigurationFault(
+                        name, reader.LineNumber, $"{reader.FieldCount} cells for {headers.Length} columns: a cell with a separator in it stands in quotes"));
+                    continue;
+                }
+
                 var cells = headers.Select((header, i) => (header, cell: i < reader.FieldCount ? reader.GetString(i).Trim() : ""))
                     .ToDictionary(pair => pair.header, pair => pair.cell, StringComparer.Ordinal);
                 if (cells.Values.Any(cell => cell.Length > 0))
@@ -42,7 +50,7 @@ public sealed class TableFile
                 }
             }
 
-            return new TableFile(name, rows);
+            return faults.Count == 0 ? new TableFile(name, rows) : throw new ConfigurationException(faults);
         }
         catch (CsvFormatException e)
         {
@@ -66,7 +74,8 @@ public sealed class TableFile
         }
     }
 
-    private static string TextOf(string path, string name)
+    /// <exception cref="ConfigurationException">The file is missing or unreadable.</exception>
+    public static string TextOf(string path, string name)
     {
         byte[] bytes;
         try

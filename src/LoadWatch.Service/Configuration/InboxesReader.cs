@@ -1,0 +1,35 @@
+namespace LoadWatch.Service.Configuration;
+
+/// <summary>Reads the inboxes of <c>loadwatch.json</c>.</summary>
+internal static class InboxesReader
+{
+    /// <param name="resolve">From a path of the file to a full one.</param>
+    public static List<Inbox> Read(LoadWatchFile file, Func<string, string> resolve, FaultList faults)
+    {
+        var inboxes = file.Inboxes.Select(entry => new Inbox(entry.Name, resolve(entry.Path), entry.Take)).ToList();
+        foreach (var (entry, i) in inboxes.Select((entry, i) => (entry, i)))
+        {
+            if (inboxes.Take(i).Any(above => above.Name == entry.Name))
+            {
+                faults.Add($"$.inboxes[{i}].name", $"the inbox \"{entry.Name}\" stands above already");
+            }
+
+            if (!Directory.Exists(entry.Path))
+            {
+                faults.Add($"$.inboxes[{i}].path", $"the folder \"{file.Inboxes[i].Path}\" is not there");
+            }
+
+            // What the service writes would come in again as new files.
+            foreach (var written in new[] { file.Data, file.Pages, file.Notices }.Where(written => IsWithin(resolve(written), entry.Path)))
+            {
+                faults.Add($"$.inboxes[{i}].path", $"the folder \"{written}\" lies in this inbox: LoadWatch writes there");
+            }
+        }
+
+        return inboxes;
+    }
+
+    private static bool IsWithin(string inner, string outer) =>
+        Path.GetRelativePath(outer, inner) is var way
+        && way != ".." && !way.StartsWith($"..{Path.DirectorySeparatorChar}", StringComparison.Ordinal) && !Path.IsPathRooted(way);
+}

@@ -1,0 +1,35 @@
+using LoadWatch.Service.Commands;
+using NodaTime;
+
+namespace LoadWatch.Service.Tests.Configuration;
+
+public sealed class LoadQuantityTests
+{
+    private static readonly LocalDate First = new(2026, 3, 2);
+
+    /// <summary>Four weeks of half an hour a day and one of an hour and a half: 630 min against a usual week of 210 min, three times as much.</summary>
+    [Fact]
+    public void AFindingSpeaksInTheUnitOfTheGroupsOwnLoad()
+    {
+        using var folder = new ConfigurationFolder();
+        folder.Write("loadwatch.json", """
+            { "time_zone": "UTC", "intake": { "settle_seconds": 0 }, "groups": [ { "id": "squad", "load_quantity": "minutes" } ] }
+            """);
+        Directory.CreateDirectory(folder.At("inbox/anna"));
+        for (var day = 0; day < 35; day++)
+        {
+            folder.Write($"inbox/anna/{day}.csv", Session(First.PlusDays(day), day < 28 ? "10:30" : "11:30"));
+        }
+
+        using var workplace = Workplace.OpenToWork(folder.At("loadwatch.json"));
+        workplace.NewSweep(First.PlusDays(35).AtMidnight().InUtc().ToInstant() + Duration.FromHours(5)).Run(TestContext.Current.CancellationToken);
+        var last = First.PlusDays(34);
+        var findings = workplace.Store.Read(session => session.Findings.OfPerson("anna", last, last));
+
+        var sentence = Assert.Single(findings, finding => finding.Rule == "load_ratio").Text;
+        Assert.Contains("3.0 times the usual week (630 against 210 min)", sentence, StringComparison.Ordinal);
+    }
+
+    private static string Session(LocalDate date, string until) =>
+        FormattableString.Invariant($"time,heart_rate_bpm\n{date:uuuu-MM-dd}T10:00:00Z,120\n{date:uuuu-MM-dd}T{until}:00Z,121\n");
+}

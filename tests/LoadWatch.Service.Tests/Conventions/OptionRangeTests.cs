@@ -1,0 +1,29 @@
+using System.ComponentModel.DataAnnotations;
+using LoadWatch.Service.Configuration;
+
+namespace LoadWatch.Service.Tests.Conventions;
+
+public sealed class OptionRangeTests
+{
+    /// <summary>Lists of zone bounds: <see cref="ConfigurationReader"/> wants them rising from above 0, so a largest value would say nothing more.</summary>
+    private static readonly string[] CheckedOtherwise =
+        ["ComputationEntry.HeartRateReserveBounds", "ComputationEntry.PowerBounds", "ComputationEntry.SpeedBounds"];
+
+    [Fact]
+    public void EveryNumberOfTheConfigurationHasARange() => Assert.Equal(CheckedOtherwise, Convention.NumbersWithoutRange(typeof(LoadWatchFile)));
+
+    [Fact]
+    public void TheDefaultsLieInTheirRangesAndDoNotContradictEachOther()
+    {
+        Assert.Empty(RangeCheck.Faults(new LoadWatchFile()));
+        Assert.Empty(LimitsCheck.Faults(new LoadWatchFile().Limits));
+    }
+
+    [Fact]
+    public void TheCheckFindsNumbersWithoutARange() => Assert.Equal(
+        ["BadInner.Deep", "BadInner.MaybeDeep", "BadOptions.List", "BadOptions.Plain"], Convention.NumbersWithoutRange(typeof(BadOptions)));
+
+    private sealed record BadOptions(int Plain, [property: Range(0, 1)] int Ranged, string Text, IReadOnlyList<double> List, IReadOnlyList<BadInner>? Inner);
+
+    private sealed record BadInner(long Deep, double? MaybeDeep);
+}
