@@ -5,7 +5,7 @@ namespace LoadWatch.Delivery;
 /// <summary>A folder that only its owner reads (I-12), in which names survive a power cut.</summary>
 internal static class PrivateFolder
 {
-    private const int ReadOnlyDirectory = 0x10000;
+    private const int ReadOnly = 0;
 
     /// <summary>Runs a piece of file work there; what the file system refuses becomes an outcome.</summary>
     public static ChannelOutcome Use(string folder, Action work)
@@ -59,7 +59,7 @@ internal static class PrivateFolder
             return;
         }
 
-        var descriptor = Open(folder, ReadOnlyDirectory);
+        var descriptor = Open(folder, ReadOnly);
         if (descriptor < 0)
         {
             throw new IOException($"the folder could not be opened to sync it: error {Marshal.GetLastPInvokeError()}");

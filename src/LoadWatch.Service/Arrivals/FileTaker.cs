@@ -18,7 +18,7 @@ public sealed class FileTaker(WorkingConfiguration configuration, Archive archiv
             case OpenedFile opened:
                 using (opened)
                 {
-                    return Take(file, opened);
+                    return TakeReadable(file, opened);
                 }
 
             case UnopenedFile { Trouble: not FileTrouble.Missing } unopened:
@@ -26,6 +26,19 @@ public sealed class FileTaker(WorkingConfiguration configuration, Archive archiv
                 return null;
             default:
                 return null; // Gone since it was listed.
+        }
+    }
+
+    private TakenFile? TakeReadable(FoundFile file, OpenedFile opened)
+    {
+        try
+        {
+            return Take(file, opened);
+        }
+        catch (SourceUnreadableException e)
+        {
+            report.Unreadable.Add($"{file.Path}: {e.Message}");
+            return null;
         }
     }
 
@@ -67,8 +80,20 @@ public sealed class FileTaker(WorkingConfiguration configuration, Archive archiv
     private static bool ShowsItsEnd(FileStream stream)
     {
         var head = new byte[DecoderSet.HeadLength];
-        var length = stream.ReadAtLeast(head, head.Length, throwOnEndOfStream: false);
+        var length = ReadHead(stream, head);
         stream.Position = 0;
         return DecoderSet.Recognise(head.AsSpan(0, length)) is ContentKind.Fit or ContentKind.Gzip or ContentKind.Zip;
+    }
+
+    private static int ReadHead(FileStream stream, byte[] head)
+    {
+        try
+        {
+            return stream.ReadAtLeast(head, head.Length, throwOnEndOfStream: false);
+        }
+        catch (IOException error)
+        {
+            throw new SourceUnreadableException(error);
+        }
     }
 }

@@ -23,14 +23,19 @@ public static class AlertsCommand
         using var workplace = Workplace.OpenToRead(configPath);
         return workplace.Store.Read(session =>
         {
+            var alerts = workplace.Configuration.People.Keys.Order(StringComparer.Ordinal)
+                .SelectMany(id => session.Alerts.All(id))
+                .Where(alert => all || AlertLife.IsActive(alert.State))
+                .ToList();
             if (json)
             {
-                new Exporter(workplace.Configuration, session, null, null, null).Write("alerts", Console.Out);
-                return ExitCode.Ok;
+                Exporter.Write(alerts.Select(Exporter.OfAlert), Console.Out);
+            }
+            else
+            {
+                Print(workplace.Configuration, alerts);
             }
 
-            var alerts = workplace.Configuration.People.Keys.Order(StringComparer.Ordinal).SelectMany(id => session.Alerts.All(id)).ToList();
-            Print(workplace.Configuration, alerts.Where(alert => all || AlertLife.IsActive(alert.State)).ToList());
             return ExitCode.Ok;
         });
     }

@@ -20,6 +20,11 @@ public static class CheckCommand
         Console.Out.WriteLine(
             $"{path} is fine. People: {configuration.People.Count}; groups: {configuration.Groups.Count}; "
             + $"contacts: {configuration.Contacts.Count}; inboxes: {configuration.Inboxes.Count}.");
+        foreach (var inbox in configuration.Inboxes.Where(inbox => !Directory.Exists(inbox.Path)))
+        {
+            Console.Out.WriteLine($"The inbox \"{inbox.Name}\" is not there now: {inbox.Path}");
+        }
+
         return ExitCode.Ok;
     }
 }

@@ -1,4 +1,5 @@
 using System.CommandLine;
+using System.Data.Common;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Dialects;
@@ -66,6 +67,14 @@ public static class CommandLine
         InstanceRunningException => ExitCode.TryLater,
         DatabaseRefusedException or InvalidDataException => ExitCode.Data,
         AggregateException { InnerException: { } inner } => Expected(inner),
+        DurabilityLostException => ExitCode.InputOutput,
+        DbException database => StoreTroubles.Of(database) switch
+        {
+            StoreTrouble.Damaged => ExitCode.Data,
+            StoreTrouble.Busy => ExitCode.TryLater,
+            StoreTrouble.Disk => ExitCode.InputOutput,
+            _ => null,
+        },
         OperationCanceledException => ExitCode.Interrupted,
         UnauthorizedAccessException => ExitCode.NoPermission,
         IOException => ExitCode.InputOutput,

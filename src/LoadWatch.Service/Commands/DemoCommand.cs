@@ -10,7 +10,7 @@ namespace LoadWatch.Service.Commands;
 public static class DemoCommand
 {
     /// <summary>The morning at which the demo looks at its night.</summary>
-    private static readonly LocalTime Morning = new(7, 0);
+    private static readonly LocalTime Morning = new(7, 30);
 
     public static Command Create()
     {
@@ -49,13 +49,13 @@ public static class DemoCommand
             Sweep(config, until, cancel);
         }
 
-        Console.Out.WriteLine($"""
+        Console.Out.WriteLine();
+        Console.Out.WriteLine("Next:");
+        foreach (var next in filesOnly ? ["sweep"] : new[] { "people", "alerts", "explain PERSON" })
+        {
+            Console.Out.WriteLine($"  {Self.Name} {next} --config {config}");
+        }
 
-            Next:
-              loadwatch people  --config {config}
-              loadwatch alerts  --config {config}
-              loadwatch explain --config {config} PERSON
-            """);
         return ExitCode.Ok;
     }
 

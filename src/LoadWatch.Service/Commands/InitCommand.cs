@@ -44,11 +44,11 @@ public static class InitCommand
           1. roster.csv   write a line for each person: person,name,group,birth_year,sex,time_zone
           2. anchors.csv  add what you know: at least heart_rate_rest and heart_rate_max; critical_power, w_prime and power_max for cyclists;
                           one_repetition_max by exercise for strength work
-          3. loadwatch init --dir {folder}   again makes a sub-folder of inbox/ for each person of the roster; so does every sweep
+          3. {Self.Name} init --dir {folder}   again makes a sub-folder of inbox/ for each person of the roster; so does every sweep
           4. inbox/       drop FIT or CSV files (also in gzip or zip) into the person's sub-folder
-          5. loadwatch check --config {Path.Combine(folder, StarterFiles.Configuration)}
-             loadwatch sweep --config {Path.Combine(folder, StarterFiles.Configuration)}
+          5. {Self.Name} check --config {Path.Combine(folder, StarterFiles.Configuration)}
+             {Self.Name} sweep --config {Path.Combine(folder, StarterFiles.Configuration)}
              then open {Path.Combine(folder, "pages", "staff.html")}
-          6. loadwatch run --config {Path.Combine(folder, StarterFiles.Configuration)}   does it every night by itself
+          6. {Self.Name} run --config {Path.Combine(folder, StarterFiles.Configuration)}   does it every night by itself
         """;
 }

@@ -23,6 +23,13 @@ public static class InspectCommand
         var json = CommonOptions.Json();
         var config = new Option<string?>("--config", "-c") { Description = "Take CSV layouts from this configuration.", HelpName = "FILE" };
         var command = new Command("inspect", "Say what is in files; nothing is taken in.") { files, list, json, config };
+        command.Validators.Add(parsed =>
+        {
+            if (parsed.GetValue(files) is not { Length: > 0 } && parsed.GetValue(list) is null)
+            {
+                parsed.AddError("Name a file, or a list of files with --from-list.");
+            }
+        });
         command.SetAction(parsed => Run(
             Names(parsed.GetValue(files) ?? [], parsed.GetValue(list)), parsed.GetValue(json), parsed.GetValue(config)));
         return command;
@@ -68,11 +75,19 @@ public static class InspectCommand
 
     private static IEnumerable<InspectLine> Inspect(DecoderSet decoders, string name)
     {
-        if (SafeFile.Open(name) is not OpenedFile opened)
+        switch (SafeFile.Open(name))
         {
-            return [InspectLine.Unreadable(name, ((UnopenedFile)SafeFile.Open(name)).Reason)];
+            case OpenedFile opened:
+                return Inspect(decoders, name, opened);
+            case UnopenedFile unopened:
+                return [InspectLine.Unreadable(name, unopened.Reason)];
+            default:
+                throw new InvalidOperationException("a file is opened or not");
         }
+    }
 
+    private static IEnumerable<InspectLine> Inspect(DecoderSet decoders, string name, OpenedFile opened)
+    {
         using (opened)
         {
             if (opened.Stamp.Size > LargestFileBytes)
@@ -80,10 +95,27 @@ public static class InspectCommand
                 return [InspectLine.Unreadable(name, $"larger than {LargestFileBytes / (1024 * 1024)} MB")];
             }
 
-            var bytes = new byte[opened.Stamp.Size];
-            opened.Stream.ReadExactly(bytes);
+            if (ReadAll(opened) is not { } bytes)
+            {
+                return [InspectLine.Unreadable(name, "it could not be read to its end")];
+            }
+
             var sha = Convert.ToHexStringLower(SHA256.HashData(bytes));
             return ArrivalContent.Expand(decoders, sha, name, bytes).SelectMany(content => Of(decoders, content)).ToList();
+        }
+    }
+
+    private static byte[]? ReadAll(OpenedFile opened)
+    {
+        try
+        {
+            var bytes = new byte[opened.Stamp.Size];
+            opened.Stream.ReadExactly(bytes);
+            return bytes;
+        }
+        catch (IOException)
+        {
+            return null;
         }
     }
 

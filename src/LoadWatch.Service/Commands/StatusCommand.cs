@@ -42,8 +42,8 @@ public static class StatusCommand
     {
         var arrivals = string.Join(", ", summary.Arrivals.Select(pair => $"{pair.Value} {pair.Key}"));
         var sweep = summary.Service is { } service
-            ? $"Last sweep of the service: {service.LastSweep}{(service.Done ? "" : $", failed: {service.Failure}")}"
-            : "The service has not run here yet (loadwatch run).";
+            ? $"Last sweep: {service.LastSweep}{(service.Done ? "" : $", failed: {service.Failure}")}; files that cannot be read: {service.Unreadable}"
+            : "No sweep yet (loadwatch sweep, or loadwatch run).";
         var faults = summary.Service is { } known
             ? new[] { known.ConfigurationFault }.OfType<string>().Concat(known.MissingInboxes.Select(name => $"The inbox \"{name}\" cannot be listed."))
             : [];

@@ -1,5 +1,6 @@
 using System.CommandLine;
 using LoadWatch.Recordings;
+using LoadWatch.Service.Health;
 using LoadWatch.Service.Pipeline;
 using NodaTime;
 
@@ -20,7 +21,9 @@ public static class SweepCommand
     private static int Run(string configPath, Instant now, CancellationToken cancel)
     {
         using var workplace = Workplace.OpenToWork(configPath);
-        Print(workplace.NewSweep(now).Run(cancel));
+        var report = workplace.NewSweep(now).Run(cancel);
+        new StatusFile(workplace).Write(MachineClock.Now(), report, configurationFault: null);
+        Print(report);
         return ExitCode.Ok;
     }
 

@@ -8,10 +8,12 @@ namespace LoadWatch.Service.Commands;
 /// <summary>The configuration with its opened store. With the lock it may take in and evaluate, without it only read.</summary>
 public sealed class Workplace : IDisposable
 {
+    private readonly string configPath;
     private readonly InstanceLock? instance;
 
-    private Workplace(WorkingConfiguration configuration, DataFolder folder, InstanceLock? instance, Store store)
+    private Workplace(string configPath, WorkingConfiguration configuration, DataFolder folder, InstanceLock? instance, Store store)
     {
+        this.configPath = Path.GetFullPath(configPath);
         Configuration = configuration;
         Folder = folder;
         this.instance = instance;
@@ -34,7 +36,7 @@ public sealed class Workplace : IDisposable
         var taken = InstanceLock.Take(folder);
         try
         {
-            return new Workplace(configuration, folder, taken, Store.Open(folder));
+            return new Workplace(configPath, configuration, folder, taken, Store.Open(folder));
         }
         catch
         {
@@ -48,13 +50,13 @@ public sealed class Workplace : IDisposable
     {
         var configuration = ConfigurationReader.Read(configPath);
         var folder = DataFolder.Open(configuration.DataFolder);
-        return new Workplace(configuration, folder, null, Store.Open(folder));
+        return new Workplace(configPath, configuration, folder, null, Store.Open(folder));
     }
 
     /// <summary>Takes over a new configuration; its data folder stays the one that is open.</summary>
     public WorkingConfiguration Adopt(WorkingConfiguration configuration) => Configuration = configuration;
 
-    public Sweep NewSweep(Instant now) => new(Configuration, Folder, Store, now, new ChildProcessProbe());
+    public Sweep NewSweep(Instant now) => new(Configuration, Folder, Store, now, new ChildProcessProbe(configPath));
 
     public void Dispose()
     {

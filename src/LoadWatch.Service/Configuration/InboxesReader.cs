@@ -14,11 +14,6 @@ internal static class InboxesReader
                 faults.Add($"$.inboxes[{i}].name", $"the inbox \"{entry.Name}\" stands above already");
             }
 
-            if (!Directory.Exists(entry.Path))
-            {
-                faults.Add($"$.inboxes[{i}].path", $"the folder \"{file.Inboxes[i].Path}\" is not there");
-            }
-
             // What the service writes would come in again as new files.
             foreach (var written in new[] { file.Data, file.Pages, file.Notices }.Where(written => IsWithin(resolve(written), entry.Path)))
             {

@@ -21,9 +21,12 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
     /// <summary>What can be exported.</summary>
     public static IReadOnlyList<string> Tables { get; } = ["arrivals", "activities", "days", "findings", "alerts"];
 
-    public void Write(string table, TextWriter output)
+    public void Write(string table, TextWriter output) => Write(Lines(table), output);
+
+    /// <summary>A line of JSON each.</summary>
+    public static void Write(IEnumerable<object> lines, TextWriter output)
     {
-        foreach (var line in Lines(table))
+        foreach (var line in lines)
         {
             output.Write(JsonSerializer.Serialize(line, line.GetType(), Words.Json));
             output.Write('\n');
@@ -139,7 +142,7 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
         finding.Limit,
         finding.Unit);
 
-    private static AlertLine OfAlert(Alert alert) => new(
+    public static AlertLine OfAlert(Alert alert) => new(
         alert.Id,
         alert.Key.Person,
         alert.Key.Rule,

@@ -67,11 +67,12 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
             .ToList();
     }
 
-    private static ArrivalVerdict ContainerVerdict(ArrivalContent content)
+    private static ArrivalVerdict ContainerVerdict(ArrivalContent content) => (content.Members, content.Problems.Count) switch
     {
-        var problem = content.Problems.Count > 0 ? content.Problems[0].ToString() : null;
-        return content.Members == 0
-            ? new ArrivalVerdict(ArrivalState.Refused, problem ?? "an archive without files", null)
-            : new ArrivalVerdict(ArrivalState.Aside, problem ?? $"an archive of {content.Members} files, each an arrival of its own", null);
-    }
+        (0, 0) => new ArrivalVerdict(ArrivalState.Refused, "an archive without files", null),
+        (0, _) => new ArrivalVerdict(ArrivalState.Refused, content.Problems[0].ToString(), null),
+        (_, 0) => new ArrivalVerdict(ArrivalState.Aside, $"an archive; files in it: {content.Members}, each an arrival of its own", null),
+        var (whole, broken) => new ArrivalVerdict(
+            ArrivalState.Refused, $"{broken} of the {whole + broken} files in it; the others are taken. The first: {content.Problems[0]}", null),
+    };
 }

@@ -17,6 +17,9 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
 
     private const int PeopleInOneCommit = 50;
 
+    /// <summary>Dates through which people are computed, by person, where it is not the last date that is over for them.</summary>
+    public IReadOnlyDictionary<string, LocalDate> Through { get; init; } = new Dictionary<string, LocalDate>();
+
     public void Run(CancellationToken cancel)
     {
         var behind = store.Read(session =>
@@ -40,10 +43,12 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
     /// <summary>The last date that is over for the person: the one that rules and alerts look at.</summary>
     public static LocalDate LastDateOver(Person person, Instant now) => now.InZone(person.Zone).Date.PlusDays(-1);
 
+    private LocalDate ThroughOf(Person person) => Through.TryGetValue(person.Id, out var date) ? date : LastDateOver(person, now);
+
     private LocalDate? RecomputeFrom(StoreSession session, Person person, Dictionary<string, LocalDate> dirty)
     {
         var asked = dirty.TryGetValue(person.Id, out var date) ? date : (LocalDate?)null;
-        var missing = session.People.ComputedTo(person.Id) is { } done && done < LastDateOver(person, now) ? done.PlusDays(1) : (LocalDate?)null;
+        var missing = session.People.ComputedTo(person.Id) is { } done && done < ThroughOf(person) ? done.PlusDays(1) : (LocalDate?)null;
         var from = asked is { } early && missing is { } next ? LocalDate.Min(early, next) : asked ?? missing;
         return from?.PlusDays(-SettlingDays);
     }
@@ -51,7 +56,7 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
     private ComputedSeries Compute(Person person, LocalDate from)
     {
         var group = configuration.Groups[person.Group];
-        var through = LastDateOver(person, now);
+        var through = ThroughOf(person);
         var activities = store.Read(session => session.Activities.OfPerson(person.Id)).Select(activity => OnDay(activity, group)).ToList();
         var days = LoadCalendar.Build(person.Id, activities, through);
         var findings = RuleBook.Evaluate(person, days, group.Limits, LoadUnits.Of(group.LoadQuantity));

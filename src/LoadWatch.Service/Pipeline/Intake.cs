@@ -16,7 +16,7 @@ public sealed class Intake(
     WorkingConfiguration configuration, Store store, Archive archive, DecoderSet decoders, Settlement settlement, Instant now, SweepReport report)
 {
     private const int GroupFiles = 64;
-    private const long GroupBytes = 64L * 1024 * 1024;
+    private const long GroupBytes = 32L * 1024 * 1024;
 
     public void TakeIn(IReadOnlyList<(FoundFile File, FileStamp Stamp)> files, CancellationToken cancel)
     {
@@ -24,11 +24,27 @@ public sealed class Intake(
         foreach (var group in Groups(files))
         {
             cancel.ThrowIfCancellationRequested();
-            var taken = group.Select(taker.Take).OfType<TakenFile>().ToList();
+            var taken = Stage(group, taker);
             if (taken.Count > 0)
             {
                 TakeGroup(taken);
             }
+        }
+    }
+
+    /// <summary>A failing disk ends the sweep; what was staged until then goes, since nobody else would remove it before the next start.</summary>
+    private static List<TakenFile> Stage(List<FoundFile> group, FileTaker taker)
+    {
+        var taken = new List<TakenFile>();
+        try
+        {
+            taken.AddRange(group.Select(taker.Take).OfType<TakenFile>());
+            return taken;
+        }
+        catch
+        {
+            taken.ForEach(file => Archive.Discard(file.Copy));
+            throw;
         }
     }
 
@@ -38,7 +54,11 @@ public sealed class Intake(
         KillPoint.Pass("archived");
         store.Write(session => RecordWaiting(session, taken));
         KillPoint.Pass("waiting");
-        settlement.Settle(Contents(taken.Where(IsHarmless)), force: false);
+        foreach (var piece in Contents(taken.Where(IsHarmless)).InPieces())
+        {
+            settlement.Settle(piece, force: false);
+        }
+
         KillPoint.Pass("settled");
         foreach (var file in taken.Where(file => file.File.Inbox.Take == TakeMode.Move))
         {
@@ -58,11 +78,9 @@ public sealed class Intake(
     private bool IsHarmless(TakenFile file) =>
         store.Read(session => session.Arrivals.Get(file.Copy.Sha)) is not { } known || !Recovery.IsPoisonous(known);
 
-    private List<SeenContent> Contents(IEnumerable<TakenFile> taken) =>
-        taken.AsParallel().AsOrdered()
-            .SelectMany(file => ArrivalContent.Expand(decoders, file.Copy.Sha, file.File.Path, file.Copy.Bytes)
-                .Select(content => new SeenContent(content, new Origin(file.File.Inbox.Name, now, file.Stamp))))
-            .ToList();
+    private IEnumerable<SeenContent> Contents(IEnumerable<TakenFile> taken) =>
+        taken.SelectMany(file => ArrivalContent.Expand(decoders, file.Copy.Sha, file.File.Path, file.Copy.Bytes)
+            .Select(content => new SeenContent(content, new Origin(file.File.Inbox.Name, now, file.Stamp))));
 
     private static IEnumerable<List<FoundFile>> Groups(IReadOnlyList<(FoundFile File, FileStamp Stamp)> files)
     {

@@ -9,11 +9,14 @@ namespace LoadWatch.Service.Pipeline;
 
 /// <summary>
 /// Takes up arrivals that were waiting when the process ended (I-4): each is decoded once in a child process first, and only a child that dies or breaks
-/// its limits counts as an attempt. Three of those refuse the arrival.
+/// its limits counts as an attempt, one a sweep: a busy machine must not refuse a good file. Three of those refuse the arrival.
 /// </summary>
 public sealed class Recovery(Store store, Archive archive, ArchiveReader reader, Settlement settlement, IDecodeProbe probe)
 {
     private const int MostAttempts = 3;
+
+    /// <summary>Whether a waiting arrival has ended a child before: then nothing waits for it (I-14).</summary>
+    public static bool IsSuspect(Arrival arrival) => arrival.Attempts > 0;
 
     /// <summary>Whether the arrival was refused because it ends the process that decodes it: no process but a child may touch it again.</summary>
     public static bool IsPoisonous(Arrival arrival) => arrival.State == ArrivalState.Refused && arrival.Attempts >= MostAttempts;
@@ -29,20 +32,29 @@ public sealed class Recovery(Store store, Archive archive, ArchiveReader reader,
 
     private void TakeUp(Arrival arrival)
     {
-        for (var attempts = arrival.Attempts; attempts < MostAttempts; attempts++)
+        if (!archive.Verify(arrival.ObjectSha))
         {
-            if (probe.Survives(archive.PathOf(arrival.ObjectSha), arrival.Size))
-            {
-                settlement.Settle(reader.Sighted(arrival.ObjectSha).ToList(), force: false);
-                return;
-            }
-
-            store.Write(session => session.Arrivals.CountAttempt(arrival.Sha));
+            Refuse(arrival, "its original in the archive is missing or damaged");
         }
-
-        store.Write(session => session.Arrivals.Settle(
-            arrival.Sha, ArrivalState.Refused, "unknown", $"poisonous: decoding ended the process or broke its limits {MostAttempts} times", null));
+        else if (probe.Survives(archive.PathOf(arrival.ObjectSha), arrival.Size))
+        {
+            foreach (var piece in reader.Sighted(arrival.ObjectSha).InPieces())
+            {
+                settlement.Settle(piece, force: false);
+            }
+        }
+        else
+        {
+            store.Write(session => session.Arrivals.CountAttempt(arrival.Sha));
+            if (arrival.Attempts + 1 >= MostAttempts)
+            {
+                Refuse(arrival, $"poisonous: decoding ended the process or broke its limits {MostAttempts} times");
+            }
+        }
     }
+
+    private void Refuse(Arrival arrival, string reason) =>
+        store.Write(session => session.Arrivals.Settle(arrival.Sha, ArrivalState.Refused, "unknown", reason, null));
 }
 
 /// <summary>Tries whether decoding a file ends the process that does it.</summary>
@@ -54,7 +66,8 @@ public interface IDecodeProbe
 }
 
 /// <summary>Runs <c>loadwatch inspect</c> on the file in a child process with a limit of time and memory.</summary>
-public sealed class ChildProcessProbe : IDecodeProbe
+/// <param name="configPath">The configuration whose CSV layouts count.</param>
+public sealed class ChildProcessProbe(string configPath) : IDecodeProbe
 {
     public bool Survives(string path, long bytes)
     {
@@ -66,14 +79,15 @@ public sealed class ChildProcessProbe : IDecodeProbe
         var limit = TimeSpan.FromSeconds(30) + TimeSpan.FromSeconds(2 * bytes / (1024.0 * 1024.0));
         if (child.WaitForExit(limit))
         {
-            return child.ExitCode == 0;
+            // A configuration being edited at this moment says nothing about the file.
+            return child.ExitCode is Commands.ExitCode.Ok or Commands.ExitCode.Configuration;
         }
 
         child.Kill(entireProcessTree: true);
         return false;
     }
 
-    private static ProcessStartInfo StartInfo(string path, long bytes)
+    private ProcessStartInfo StartInfo(string path, long bytes)
     {
         var program = Environment.ProcessPath ?? throw new InvalidOperationException("the path of this process is not known");
         var start = new ProcessStartInfo(program) { UseShellExecute = false, RedirectStandardOutput = true, RedirectStandardError = true };
@@ -82,7 +96,7 @@ public sealed class ChildProcessProbe : IDecodeProbe
             start.ArgumentList.Add(typeof(ChildProcessProbe).Assembly.Location);
         }
 
-        foreach (var word in new[] { "inspect", "--json", path })
+        foreach (var word in new[] { "inspect", "--json", "--config", configPath, path })
         {
             start.ArgumentList.Add(word);
         }

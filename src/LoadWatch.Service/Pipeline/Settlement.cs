@@ -1,3 +1,4 @@
+using LoadWatch.Decoding;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
@@ -14,6 +15,7 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
     {
         var pending = Pending(seen, force);
         var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims)).ToList();
+        var before = pending.ToDictionary(item => item.Content.Sha, item => item.Before, StringComparer.Ordinal);
         KillPoint.Pass("decoded");
         store.Write(session =>
         {
@@ -26,14 +28,14 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
 
             effects.Finish();
         });
-        foreach (var arrival in decoded)
+        foreach (var arrival in decoded.Where(arrival => before[arrival.Sha] != arrival.Verdict.State))
         {
             report.Count(arrival.Verdict.State);
         }
     }
 
     /// <summary>Contents that are new, or whose owner is told differently now, each once.</summary>
-    private List<(ArrivalContent Content, IReadOnlyList<string> Claims)> Pending(IReadOnlyList<SeenContent> seen, bool force) =>
+    private List<(ArrivalContent Content, IReadOnlyList<string> Claims, ArrivalState? Before)> Pending(IReadOnlyList<SeenContent> seen, bool force) =>
         store.Read(session => seen
             .GroupBy(item => item.Content.Sha, StringComparer.Ordinal)
             .Select(same =>
@@ -41,12 +43,14 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
                 var paths = session.Sightings.Of(same.Key).Select(sighting => sighting.Path).Concat(same.Select(item => item.Content.Path));
                 return (same.First().Content, Claims: Attribution.Claims(paths, configuration.People), Arrival: session.Arrivals.Get(same.Key));
             })
-            .Where(item => force || IsPending(item.Arrival, item.Claims))
-            .Select(item => (item.Content, item.Claims))
+            .Where(item => force || IsPending(item.Arrival, item.Content, item.Claims))
+            .Select(item => (item.Content, item.Claims, item.Arrival?.State))
             .ToList());
 
-    private static bool IsPending(Arrival? arrival, IReadOnlyList<string> claims) => arrival?.State switch
+    private static bool IsPending(Arrival? arrival, ArrivalContent content, IReadOnlyList<string> claims) => arrival?.State switch
     {
+        // An archive file refused inside another one, now seen by itself.
+        ArrivalState.Refused => arrival.ParentSha is not null && content.ParentSha is null && content.Kind is ContentKind.Gzip or ContentKind.Zip,
         null or ArrivalState.Waiting => true,
         ArrivalState.Stored => claims.Count != 1 || claims[0] != arrival.Person,
         ArrivalState.Held => true,

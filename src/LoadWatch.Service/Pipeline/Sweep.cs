@@ -1,4 +1,5 @@
 using LoadWatch.Decoding;
+using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
@@ -10,10 +11,9 @@ namespace LoadWatch.Service.Pipeline;
 /// <summary>One pass over everything: take in, settle, compute days, judge alerts, decide and deliver notices. Running it again changes nothing.</summary>
 public sealed class Sweep
 {
-    private const int ObjectsInOneCommit = 64;
-
     private readonly WorkingConfiguration configuration;
     private readonly Store store;
+    private readonly Archive archive;
     private readonly Instant now;
     private readonly Settlement settlement;
     private readonly Intake intake;
@@ -26,7 +26,7 @@ public sealed class Sweep
         this.configuration = configuration;
         this.store = store;
         this.now = now;
-        var archive = new Archive(folder);
+        archive = new Archive(folder);
         var decoders = new DecoderSet(configuration.Layouts);
         var decoder = new ArrivalDecoder(configuration, decoders, archive, now);
         reader = new ArchiveReader(store, archive, decoders);
@@ -53,27 +53,52 @@ public sealed class Sweep
     {
         recovery.Run(cancel);
         var objects = store.Read(session => session.Arrivals.All())
-            .Where(arrival => !Recovery.IsPoisonous(arrival))
+            .Where(arrival => arrival.State != ArrivalState.Waiting && !Recovery.IsPoisonous(arrival))
             .Select(arrival => arrival.ObjectSha)
             .Distinct(StringComparer.Ordinal)
             .ToList();
-        store.Write(session =>
-        {
-            session.Derived.Empty();
-            session.Derived.SetConfigHash("");
-        });
+        var through = store.Write(EmptyDerived);
         var done = 0;
-        foreach (var group in objects.Chunk(ObjectsInOneCommit))
+        foreach (var piece in objects.SelectMany(sha => Kept(sha, () => progress?.Invoke(++done, objects.Count))).InPieces())
         {
             cancel.ThrowIfCancellationRequested();
-            settlement.Settle(group.SelectMany(reader.Kept).ToList(), force: true);
-            done += group.Length;
-            progress?.Invoke(done, objects.Count);
+            settlement.Settle(piece, force: true);
         }
 
-        new DayUpdate(configuration, store, now, Report).Run(cancel);
+        new DayUpdate(configuration, store, now, Report) { Through = through }.Run(cancel);
         store.Write(session => session.Derived.SetConfigHash(configuration.Hash));
         return Report;
+    }
+
+    /// <returns>The dates through which people were computed: a rebuild ends with the same rows, whatever the clock says by now.</returns>
+    private Dictionary<string, LocalDate> EmptyDerived(StoreSession session)
+    {
+        var through = configuration.People.Keys
+            .Select(person => (person, Date: session.People.ComputedTo(person)))
+            .Where(item => item.Date is not null)
+            .ToDictionary(item => item.person, item => item.Date!.Value, StringComparer.Ordinal);
+        session.Derived.Empty();
+        session.Derived.SetConfigHash("");
+        return through;
+    }
+
+    private IEnumerable<SeenContent> Kept(string objectSha, Action whenDone)
+    {
+        if (archive.Verify(objectSha))
+        {
+            foreach (var content in reader.Kept(objectSha))
+            {
+                yield return content;
+            }
+        }
+        else
+        {
+            // The others go on; the row says what is missing, and a later rebuild finds it again once the original is back.
+            store.Write(session => session.Arrivals.Settle(
+                objectSha, ArrivalState.Refused, "unknown", "its original in the archive is missing or damaged", null));
+        }
+
+        whenDone();
     }
 
     /// <summary>What was computed under another configuration is computed again: anchors, owners and limits may differ.</summary>
@@ -87,14 +112,13 @@ public sealed class Sweep
         if (derivedUnder != configuration.Hash)
         {
             Rebuild(cancel);
-            Report.Settled.Clear();
         }
     }
 
     private void Evaluate(CancellationToken cancel)
     {
         // Nothing settled may be waiting (I-14): a night that is half in would raise what the other half returns.
-        if (store.Read(session => session.Arrivals.Waiting()).Count > 0)
+        if (store.Read(session => session.Arrivals.Waiting()).Any(arrival => !Recovery.IsSuspect(arrival)))
         {
             return;
         }

@@ -14,7 +14,8 @@ public sealed class Archive(DataFolder folder)
 
     /// <summary>Reads the source once: hashes it, writes a copy and makes the copy durable. It gets its name by <see cref="Commit"/>.</summary>
     /// <param name="limitBytes">The most that is taken; at most 2 GB, since the bytes are kept in memory.</param>
-    /// <exception cref="IOException">The source or the disk failed; nothing is left behind.</exception>
+    /// <exception cref="SourceUnreadableException">The source failed; nothing is left behind.</exception>
+    /// <exception cref="IOException">The disk failed; nothing is left behind.</exception>
     public Staging Stage(Stream source, long limitBytes, CancellationToken cancel = default)
     {
         var temporary = TemporaryPath();
@@ -96,7 +97,7 @@ public sealed class Archive(DataFolder folder)
         using var hash = IncrementalHash.CreateHash(HashAlgorithmName.SHA256);
         using var kept = new MemoryStream(ExpectedBytes(source, limitBytes));
         var buffer = new byte[BufferBytes];
-        for (var read = source.Read(buffer); read > 0; read = source.Read(buffer))
+        for (var read = ReadSource(source, buffer); read > 0; read = ReadSource(source, buffer))
         {
             cancel.ThrowIfCancellationRequested();
             if (kept.Length + read > limitBytes)
@@ -112,6 +113,18 @@ public sealed class Archive(DataFolder folder)
 
         copy.Flush(flushToDisk: true);
         return new StagedCopy(Convert.ToHexStringLower(hash.GetHashAndReset()), kept.GetBuffer().AsMemory(0, (int)kept.Length), path);
+    }
+
+    private static int ReadSource(Stream source, byte[] buffer)
+    {
+        try
+        {
+            return source.Read(buffer);
+        }
+        catch (IOException error)
+        {
+            throw new SourceUnreadableException(error);
+        }
     }
 
     private static int ExpectedBytes(Stream source, long limitBytes) =>

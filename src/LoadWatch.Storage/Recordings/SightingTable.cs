@@ -34,13 +34,13 @@ public sealed class SightingTable
         session.Execute(Insert, new { inbox, path, sha, firstSeen, stamp.Size, stamp.ModifiedUnixMs, stamp.FileId });
     }
 
-    /// <summary>Every name of a content, sorted by inbox and path, ordinally: the first is the one shown (I-5).</summary>
+    /// <summary>Every name of a content, sorted by path and inbox, ordinally: the first is the one shown (I-5).</summary>
     public IReadOnlyList<Sighting> Of(string sha) =>
     [
         .. session.Rows<Row>(SelectOf, new { sha })
             .Select(row => row.ToSighting())
-            .OrderBy(sighting => sighting.Inbox, StringComparer.Ordinal)
-            .ThenBy(sighting => sighting.Path, StringComparer.Ordinal),
+            .OrderBy(sighting => sighting.Path, StringComparer.Ordinal)
+            .ThenBy(sighting => sighting.Inbox, StringComparer.Ordinal),
     ];
 
     private sealed class Row
