@@ -51,7 +51,7 @@ public sealed class RealInspectTests
         var count = parts.Sum(part => part.GetProperty("n").GetInt32());
         if (expected.Int($"{column}_n") == 0 && column is not "hr")
         {
-            return; // The other decoder leaves out what comes in developer or packed fields.
+            return; // The other decoder leaves out what comes in developer fields.
         }
 
         Assert.Equal(expected.Int($"{column}_n"), count);
