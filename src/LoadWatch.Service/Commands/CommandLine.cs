@@ -1,5 +1,6 @@
 using System.CommandLine;
 using LoadWatch.Service.Configuration;
+using LoadWatch.Service.Schedule;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Dialects;
 using LoadWatch.Storage.Files;
@@ -27,7 +28,13 @@ public static class CommandLine
 
         try
         {
-            return await parsed.InvokeAsync(new InvocationConfiguration { EnableDefaultExceptionHandler = false });
+            return await parsed.InvokeAsync(new InvocationConfiguration
+            {
+                EnableDefaultExceptionHandler = false,
+
+                // The library's own two seconds would cut the transaction under way off.
+                ProcessTerminationTimeout = ServiceHost.StopsWithin + TimeSpan.FromSeconds(5),
+            });
         }
         catch (Exception e) when (Expected(e) is { } code)
         {
