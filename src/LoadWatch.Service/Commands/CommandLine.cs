@@ -72,6 +72,7 @@ public static class CommandLine
         ConfigurationException => ExitCode.Configuration,
         InstanceRunningException => ExitCode.TryLater,
         DatabaseRefusedException or InvalidDataException => ExitCode.Data,
+        DurabilityLostException => ExitCode.InputOutput,
         AggregateException { InnerException: { } inner } => Expected(inner),
         OperationCanceledException => ExitCode.Interrupted,
         UnauthorizedAccessException => ExitCode.NoPermission,
