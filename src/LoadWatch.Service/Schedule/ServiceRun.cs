@@ -30,13 +30,16 @@ public static class ServiceRun
         {
             await host.RunAsync(cancel);
         }
-        catch (OperationCanceledException) when (stopping.IsCancellationRequested)
+        catch (Exception e) when (stopping.IsCancellationRequested && IsCutOff(e))
         {
             // The stop took longer than allowed and was cut off; the next start goes on from the last commit (I-4).
         }
 
         return end.Code;
     }
+
+    private static bool IsCutOff(Exception e) =>
+        e is OperationCanceledException || (e is AggregateException several && several.InnerExceptions.All(IsCutOff));
 
     /// <summary>The Windows service manager restarts a service only where it reported a failure before it stopped.</summary>
     private static void TellWindows(IHostLifetime manager, int code)

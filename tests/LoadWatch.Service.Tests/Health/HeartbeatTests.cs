@@ -11,9 +11,9 @@ public sealed class HeartbeatTests : ISystemdNotifier, ILogger<Watchdog>
     private readonly List<string> told = [];
     private readonly List<int> logged = [];
 
-    public bool IsEnabled => true;
+    bool ISystemdNotifier.IsEnabled => true;
 
-    public void Notify(ServiceState state) => told.Add(state.ToString());
+    void ISystemdNotifier.Notify(ServiceState state) => told.Add(state.ToString());
 
     [Fact]
     public void AServiceThatGetsOnIsAlive()

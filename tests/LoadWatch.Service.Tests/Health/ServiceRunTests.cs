@@ -22,6 +22,9 @@ public sealed class ServiceRunTests
     public async Task AServiceThatTakesTooLongToStopIsCutOffWithoutAFailure() => Assert.Equal(0, await Run(new Stopping(_ => { }), new Clinging()));
 
     [Fact]
+    public async Task SoAreSeveral() => Assert.Equal(0, await Run(new Stopping(_ => { }), new Clinging(), new Clinging()));
+
+    [Fact]
     public void TheFirstReasonStands()
     {
         var end = new ServiceEnd();

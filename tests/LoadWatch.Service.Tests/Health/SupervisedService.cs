@@ -13,7 +13,7 @@ internal sealed class SupervisedService : IDisposable
 {
     private const string Parent = """
         printf systemd >"/proc/$$/comm" || exit 99
-        "$@" >/dev/null &
+        "$@" >/dev/null 2>&1 &
         echo $!
         wait $!
         echo $?

@@ -1,5 +1,6 @@
 using System.Globalization;
 using LoadWatch.Service.Configuration;
+using LoadWatch.Storage;
 
 namespace LoadWatch.Service.Tests.Health;
 
@@ -32,7 +33,8 @@ public sealed class SystemdTests : IDisposable
         var id = await service.Id();
         await service.Hears("READY=1");
         Assert.True(File.Exists(Path.Combine(Data, "loadwatch.db")), "ready before the database is");
-        Assert.Equal(id.ToString(CultureInfo.InvariantCulture), await File.ReadAllTextAsync(Path.Combine(Data, "loadwatch.lock"), TestContext.Current.CancellationToken));
+        var held = Assert.Throws<InstanceRunningException>(() => InstanceLock.Take(DataFolder.Open(Data)));
+        Assert.Equal(id, held.ProcessId);
         await service.Hears("WATCHDOG=1");
         await service.Hears("WATCHDOG=1");
         await Tool.Run("kill", "-TERM", id.ToString(CultureInfo.InvariantCulture));
