@@ -13,6 +13,7 @@ public sealed class FileTaker(WorkingConfiguration configuration, Archive archiv
     /// <summary>The file with a durable copy of its bytes, or null when it is left for a later sweep; the report says why.</summary>
     public TakenFile? Take(FoundFile file)
     {
+        report.Advanced();
         switch (SafeFile.Open(file.FullPath))
         {
             case OpenedFile opened:

@@ -1,6 +1,7 @@
 using System.CommandLine;
 using System.Data.Common;
 using LoadWatch.Service.Configuration;
+using LoadWatch.Service.Schedule;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Dialects;
 using LoadWatch.Storage.Files;
@@ -28,7 +29,13 @@ public static class CommandLine
 
         try
         {
-            return await parsed.InvokeAsync(new InvocationConfiguration { EnableDefaultExceptionHandler = false });
+            return await parsed.InvokeAsync(new InvocationConfiguration
+            {
+                EnableDefaultExceptionHandler = false,
+
+                // The library's own two seconds would cut the transaction under way off.
+                ProcessTerminationTimeout = ServiceHost.StopsWithin + TimeSpan.FromSeconds(5),
+            });
         }
         catch (Exception e) when (Expected(e) is { } code)
         {
@@ -66,6 +73,7 @@ public static class CommandLine
         ConfigurationException => ExitCode.Configuration,
         InstanceRunningException => ExitCode.TryLater,
         DatabaseRefusedException or InvalidDataException => ExitCode.Data,
+        DurabilityLostException => ExitCode.InputOutput,
         AggregateException { InnerException: { } inner } => Expected(inner),
         DurabilityLostException => ExitCode.InputOutput,
         DbException database => StoreTroubles.Of(database) switch

@@ -2,7 +2,6 @@ using System.CommandLine;
 using LoadWatch.Service.Health;
 using LoadWatch.Service.Schedule;
 using Microsoft.Extensions.DependencyInjection;
-using Microsoft.Extensions.Hosting;
 using Microsoft.Extensions.Logging;
 using NodaTime;
 
@@ -31,7 +30,6 @@ public static class RunCommand
             workplace.Configuration.Inboxes.Count,
             workplace.Configuration.Contacts.Count,
             DateTimeZoneProviders.Tzdb.VersionId);
-        await host.RunAsync(cancel);
-        return Environment.ExitCode;
+        return await ServiceRun.ToTheEndAsync(host, cancel);
     }
 }

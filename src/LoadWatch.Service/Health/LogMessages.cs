@@ -26,6 +26,9 @@ public static partial class LogMessages
     [LoggerMessage(EventId = 9901, EventName = "SweepFailed", Level = LogLevel.Error, Message = "A sweep failed; the next one tries again")]
     public static partial void SweepFailed(ILogger logger, Exception exception);
 
+    [LoggerMessage(EventId = 9903, EventName = "WorkStalled", Level = LogLevel.Critical, Message = "The work has not got on for {Seconds} seconds; the watchdog is told no more, and systemd starts the service anew")]
+    public static partial void WorkStalled(ILogger logger, int seconds);
+
     [LoggerMessage(EventId = 9902, EventName = "DurabilityLost", Level = LogLevel.Critical, Message = "The disk failed to keep what was written; the service stops")]
     public static partial void DurabilityLost(ILogger logger, Exception exception);
 }

@@ -37,6 +37,7 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
             var computed = group.AsParallel().AsOrdered().Select(item => Compute(item.person, item.From!.Value)).ToList();
             store.Write(session => computed.ForEach(series => series.Write(session)));
             report.PeopleComputed += computed.Count;
+            report.Advanced();
         }
     }
 

@@ -30,6 +30,8 @@ public sealed class Deliveries(WorkingConfiguration configuration, Store store, 
                 store.Write(session => session.Notices.MarkFailed(notice.Key, channel, recipient, outcome.Reason));
                 report.Undelivered.Add($"{channel} of {notice.Key}: {outcome.Reason}");
             }
+
+            report.Advanced();
         }
     }
 
@@ -48,6 +50,8 @@ public sealed class Deliveries(WorkingConfiguration configuration, Store store, 
             {
                 report.Undelivered.Add($"page of {contact.Id}: {outcome.Reason}");
             }
+
+            report.Advanced();
         }
     }
 }

@@ -32,6 +32,8 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
         {
             report.Count(arrival.Verdict.State);
         }
+
+        report.Advanced();
     }
 
     /// <summary>Contents that are new, or whose owner is told differently now, each once.</summary>

@@ -5,6 +5,9 @@ namespace LoadWatch.Service.Pipeline;
 /// <summary>What one sweep did, in counts.</summary>
 public sealed class SweepReport
 {
+    /// <summary>Called after every step that got the sweep on: a file, a group, a notice. The service's watchdog listens.</summary>
+    public Action Advanced { get; set; } = () => { };
+
     /// <summary>Files seen in the inboxes.</summary>
     public int Seen { get; set; }
 

@@ -1,8 +1,12 @@
+using System.Runtime.Versioning;
 using LoadWatch.People;
 using LoadWatch.Service.Commands;
 using LoadWatch.Service.Health;
 using Microsoft.Extensions.DependencyInjection;
 using Microsoft.Extensions.Hosting;
+using Microsoft.Extensions.Hosting.Systemd;
+using Microsoft.Extensions.Logging;
+using Microsoft.Extensions.Logging.EventLog;
 using NodaTime;
 using Quartz;
 using Serilog;
@@ -12,17 +16,24 @@ namespace LoadWatch.Service.Schedule;
 /// <summary>Assembles the process that runs every night.</summary>
 public static class ServiceHost
 {
+    /// <summary>A sweep is told to stop and comes to its next commit in this time; service managers must wait longer.</summary>
+    public static readonly TimeSpan StopsWithin = TimeSpan.FromSeconds(20);
+
+    private const string WindowsName = "LoadWatch";
+
     private static readonly JobKey SweepKey = new("sweep");
 
     /// <summary>Quartz in memory: schedules come from the configuration, and what was missed is caught up from our own tables (I-7).</summary>
     public static IHost Build(Workplace workplace, string configPath)
     {
         var builder = Host.CreateApplicationBuilder(new HostApplicationBuilderSettings { ContentRootPath = AppContext.BaseDirectory });
-        builder.Services.AddSystemd();
-        builder.Services.AddWindowsService(options => options.ServiceName = "LoadWatch");
-        builder.Services.AddSerilog(logger => ServiceLog.Configure(logger, workplace.Folder.Root, toConsole: true));
-        builder.Services.Configure<HostOptions>(options => options.ShutdownTimeout = TimeSpan.FromSeconds(20));
+        builder.Logging.ClearProviders();
+        AddServiceManagers(builder.Services);
+        builder.Services.AddSerilog(logger => ServiceLog.Configure(logger, workplace.Folder.Root, toConsole: true), writeToProviders: true);
+        builder.Services.Configure<HostOptions>(options => options.ShutdownTimeout = StopsWithin);
         builder.Services.AddSingleton(TimeProvider.System);
+        builder.Services.AddSingleton<ServiceEnd>();
+        builder.Services.AddSingleton(new Heartbeat(TimeProvider.System, workplace.Configuration.ScanEvery.ToTimeSpan() + Heartbeat.LongestStep));
         builder.Services.AddSingleton(workplace);
         builder.Services.AddSingleton(new ConfigurationFile(configPath));
         builder.Services.AddSingleton<StatusFile>();
@@ -31,6 +42,27 @@ public static class ServiceHost
         builder.Services.AddHostedService<InboxWatcher>();
         return builder.Build();
     }
+
+    /// <summary>Each is without effect where another or none started this process. The watchdog comes first, so it is the last to stop.</summary>
+    private static void AddServiceManagers(IServiceCollection services)
+    {
+        services.AddSystemd();
+        if (SystemdHelpers.IsSystemdService())
+        {
+            services.AddHostedService<Watchdog>();
+        }
+
+        services.AddWindowsService(options => options.ServiceName = WindowsName);
+        if (OperatingSystem.IsWindows())
+        {
+            NameEventSource(services);
+        }
+    }
+
+    /// <summary>The source that the install script makes; without it the log files remain.</summary>
+    [SupportedOSPlatform("windows")]
+    private static void NameEventSource(IServiceCollection services) =>
+        services.Configure<EventLogSettings>(settings => settings.SourceName = WindowsName);
 
     private static void Schedule(IQuartzBuilder quartz, Workplace workplace)
     {

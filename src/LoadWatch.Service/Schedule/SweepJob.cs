@@ -13,7 +13,14 @@ namespace LoadWatch.Service.Schedule;
 /// <summary>One sweep. The configuration is read anew before each, as one snapshot; a faulty one is reported and the last good one kept.</summary>
 [DisallowConcurrentExecution]
 public sealed class SweepJob(
-    Workplace workplace, ConfigurationFile file, TimeProvider clock, StatusFile status, IHostApplicationLifetime lifetime, ILogger<SweepJob> log) : IJob
+    Workplace workplace,
+    ConfigurationFile file,
+    TimeProvider clock,
+    StatusFile status,
+    Heartbeat heartbeat,
+    ServiceEnd end,
+    IHostApplicationLifetime lifetime,
+    ILogger<SweepJob> log) : IJob
 {
     public ValueTask Execute(IJobExecutionContext context, CancellationToken cancellationToken = default)
     {
@@ -21,14 +28,16 @@ public sealed class SweepJob(
         {
             var fault = AdoptConfiguration();
             var now = MachineClock.Now(clock);
-            var report = workplace.NewSweep(now).Run(cancellationToken);
-            Log(report);
-            status.Write(now, report, fault);
+            var sweep = workplace.NewSweep(now);
+            sweep.Report.Advanced = heartbeat.Beat;
+            sweep.Run(cancellationToken);
+            Log(sweep.Report);
+            status.Write(now, sweep.Report, fault);
         }
         catch (DurabilityLostException e)
         {
             LogMessages.DurabilityLost(log, e);
-            Environment.ExitCode = ExitCode.InputOutput;
+            end.Fail(ExitCode.InputOutput);
             lifetime.StopApplication();
         }
         catch (Exception e) when (!cancellationToken.IsCancellationRequested)
@@ -36,6 +45,14 @@ public sealed class SweepJob(
             // The next scan tries again; the status file tells monitoring that this one failed.
             LogMessages.SweepFailed(log, e);
             status.WriteFailure(MachineClock.Now(clock), e);
+        }
+        catch (OperationCanceledException) when (cancellationToken.IsCancellationRequested)
+        {
+            // The service stops between two commits; the next start goes on from there (I-4).
+        }
+        finally
+        {
+            heartbeat.Beat();
         }
 
         return ValueTask.CompletedTask;
