@@ -58,6 +58,7 @@ public static class CommandLine
         ExportCommand.Create(),
         RebuildCommand.Create(),
         StatusCommand.Create(),
+        MailTestCommand.Create(),
     };
 
     private static int? Expected(Exception e) => e switch

@@ -55,6 +55,7 @@ public sealed class ConfigurationReader
         var anchors = AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList());
         var contacts = Contacts(file, groups, people, zone);
         var inboxes = Inboxes(file);
+        var mail = new MailReader(Resolve, (at, reason) => faults.Add(Fault(at, reason))).Read(file);
         Stop();
 
         var (hash, text) = Version(json, file);
@@ -74,7 +75,10 @@ public sealed class ConfigurationReader
             computation,
             Duration.FromSeconds(file.Intake.ScanSeconds),
             Duration.FromSeconds(file.Intake.SettleSeconds),
-            file.Intake.LargestFileMegabytes * 1024L * 1024L);
+            file.Intake.LargestFileMegabytes * 1024L * 1024L)
+        {
+            Mail = mail,
+        };
     }
 
     private LoadWatchFile Parse(byte[] json)
@@ -162,7 +166,10 @@ public sealed class ConfigurationReader
                 entry.People,
                 Zone(entry.TimeZone, $"$.contacts[{i}].time_zone") ?? zone,
                 LocalTimePattern.CreateWithInvariantCulture("HH:mm").Parse(entry.BriefAt).Value,
-                entry.BriefDays.ToHashSet()));
+                entry.BriefDays.ToHashSet())
+            {
+                Mail = entry.Mail.Length > 0 ? entry.Mail : null,
+            });
         }
 
         return contacts;

@@ -18,33 +18,78 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now)
     private const int DaysBack = 400;
     private const int RemarkDays = 14;
     private const int RefusedDays = 7;
+    private const string Mail = "mail";
 
-    /// <summary>Where a notice goes. Mail joins here.</summary>
-    public static IReadOnlyList<string> Channels { get; } = ["page", "log"];
-
-    /// <summary>Freezes every brief that is due, with its deliveries.</summary>
+    /// <summary>Freezes every brief that is due, and every update of a changed list, with its deliveries.</summary>
     /// <returns>How many were decided.</returns>
-    public int Decide(StoreSession session)
+    public int Decide(StoreSession session) => configuration.Contacts.Count(contact => DecideBrief(session, contact) || DecideUpdate(session, contact));
+
+    private bool DecideBrief(StoreSession session, Contact contact)
     {
-        var due = configuration.Contacts
-            .Where(contact => NoticePolicy.Decide(contact, now, session.Notices.Exists) == NoticeReason.BriefDue)
-            .ToList();
-        foreach (var contact in due)
+        if (NoticePolicy.Decide(contact, now, session.Notices.Exists) != NoticeReason.BriefDue)
         {
-            var brief = Build(session, contact);
-            var notice = new Notice(
-                NoticePolicy.BriefKey(contact, brief.Date),
-                contact.Id,
-                brief.Date,
-                BriefText.Subject(brief),
-                BriefText.Write(brief),
-                PageRenderer.Render(brief),
-                NoticeReason.BriefDue);
-            session.Notices.Add(notice, session.Alerts.Changes.LastPosition(), Channels.Select(channel => new Storage.Notices.Delivery(channel, contact.Id)).ToList());
+            return false;
         }
 
-        return due.Count;
+        var brief = Build(session, contact);
+        var notice = new Notice(
+            NoticePolicy.BriefKey(contact, brief.Date),
+            contact.Id,
+            brief.Date,
+            BriefText.Subject(brief),
+            BriefText.Write(brief),
+            PageRenderer.Render(brief),
+            NoticeReason.BriefDue);
+        var flagged = brief.DataUpTo is null ? null : Flagged(session, contact);
+        return Freeze(session, notice with { Flagged = flagged }, Ways(contact));
     }
+
+    /// <summary>Only mail is told twice: the page is rewritten anyway.</summary>
+    private bool DecideUpdate(StoreSession session, Contact contact)
+    {
+        var date = now.InZone(contact.Zone).Date;
+        var ways = Ways(contact).Where(way => way.Channel == Mail).ToList();
+        if (ways.Count == 0 || session.Notices.Get(NoticePolicy.BriefKey(contact, date))?.Flagged is not { } told)
+        {
+            return false;
+        }
+
+        var standing = Flagged(session, contact);
+        if (NoticePolicy.DecideUpdate(contact, date, told, standing, session.Notices.Exists) != NoticeReason.ListChanged)
+        {
+            return false;
+        }
+
+        var built = Build(session, contact);
+        var brief = built with { FirstLine = $"{FlaggedList.ChangeInWords(told, standing)} {built.FirstLine}" };
+        var notice = new Notice(
+            NoticePolicy.UpdateKey(contact, date),
+            contact.Id,
+            date,
+            BriefText.UpdateSubject(brief),
+            BriefText.Write(brief),
+            PageRenderer.Render(brief),
+            NoticeReason.ListChanged);
+        return Freeze(session, notice with { Flagged = standing }, ways);
+    }
+
+    private bool Freeze(StoreSession session, Notice notice, IReadOnlyList<Storage.Notices.Delivery> ways) =>
+        session.Notices.Add(notice with { Decided = now }, session.Alerts.Changes.LastPosition(), ways);
+
+    /// <summary>Where a contact's notices go.</summary>
+    private List<Storage.Notices.Delivery> Ways(Contact contact)
+    {
+        List<Storage.Notices.Delivery> ways = [new("page", contact.Id), new("log", contact.Id)];
+        if (configuration.Mail is not null && contact.Mail is { } address)
+        {
+            ways.Add(new Storage.Notices.Delivery(Mail, address));
+        }
+
+        return ways;
+    }
+
+    private string Flagged(StoreSession session, Contact contact) =>
+        FlaggedList.Of(configuration.PeopleOf(contact).SelectMany(person => session.Alerts.Open(person.Id)));
 
     /// <summary>The contact's brief as of now, due or not.</summary>
     public Brief Build(StoreSession session, Contact contact)
@@ -87,7 +132,10 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now)
             : [$"load unknown on {without} of {recorded.Count} recorded days of the last {RemarkDays}: no usable heart rate, or a reference value is missing"];
     }
 
-    private List<BriefLine> Questions(StoreSession session, Contact contact)
+    private List<BriefLine> Questions(StoreSession session, Contact contact) =>
+        [.. MissedNotices.Lines(session, contact, Ways(contact), now), .. Files(session, contact)];
+
+    private List<BriefLine> Files(StoreSession session, Contact contact)
     {
         if (contact.People.Count > 0)
         {

@@ -98,8 +98,7 @@ public sealed class Sweep
         new DayUpdate(configuration, store, now, Report).Run(cancel);
         store.Write(new Evaluation(configuration, briefs, now, Report).Run);
         KillPoint.Pass("evaluated");
-        var deliveries = new Deliveries(configuration, store, briefs, Report);
-        deliveries.Run();
-        deliveries.RewritePages();
+        new Deliveries(store, Deliveries.Channels(configuration), Report).Run(now);
+        new Pages(configuration, store, briefs, Report).Rewrite();
     }
 }

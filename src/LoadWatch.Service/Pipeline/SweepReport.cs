@@ -32,6 +32,12 @@ public sealed class SweepReport
     /// <summary>Deliveries that did not go through and are tried again, with the reason.</summary>
     public List<string> Undelivered { get; } = [];
 
+    /// <summary>Deliveries that are not tried again, with the reason.</summary>
+    public List<string> GivenUp { get; } = [];
+
+    /// <summary>Contacts and channels by which nothing got through at the last try.</summary>
+    public int Missed { get; set; }
+
     /// <summary>Pages that stand after the sweep.</summary>
     public List<string> Pages { get; } = [];
 

@@ -79,5 +79,10 @@ public sealed class SweepJob(
         {
             LogMessages.DeliveryFailed(log, undelivered);
         }
+
+        foreach (var given in report.GivenUp)
+        {
+            LogMessages.DeliveryGivenUp(log, given);
+        }
     }
 }
