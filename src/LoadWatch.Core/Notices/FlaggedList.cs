@@ -14,12 +14,12 @@ public static class FlaggedList
             .Distinct(StringComparer.Ordinal)
             .Order(StringComparer.Ordinal));
 
-    /// <summary>The change in one sentence without names: <c>Since the morning brief 2 people came onto the list and 1 left it.</c></summary>
+    /// <summary>The change in one sentence without names: <c>Since the morning brief 2 people came onto the list and 1 person left the list.</c></summary>
     public static string ChangeInWords(string told, string now)
     {
         var before = Ids(told);
         var after = Ids(now);
-        var parts = new[] { Part(after.Except(before, StringComparer.Ordinal).Count(), "came onto the list"), Part(before.Except(after, StringComparer.Ordinal).Count(), "left it") };
+        var parts = new[] { Part(after.Except(before, StringComparer.Ordinal).Count(), "came onto the list"), Part(before.Except(after, StringComparer.Ordinal).Count(), "left the list") };
         return $"Since the morning brief {string.Join(" and ", parts.OfType<string>())}.";
     }
 

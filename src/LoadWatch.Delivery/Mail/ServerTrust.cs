@@ -85,7 +85,8 @@ internal sealed class ServerTrust(string? authorityFile)
         {
             _ when Has(X509ChainStatusFlags.NotTimeValid) => "the server's certificate is out of date",
             _ when Has(X509ChainStatusFlags.Revoked) => "the server's certificate was revoked",
-            _ when Has(X509ChainStatusFlags.UntrustedRoot) || Has(X509ChainStatusFlags.PartialChain) =>
+            // An authority of the same name but another key shows as a bad signature.
+            _ when Has(X509ChainStatusFlags.UntrustedRoot) || Has(X509ChainStatusFlags.PartialChain) || Has(X509ChainStatusFlags.NotSignatureValid) =>
                 "the server's certificate comes from no trusted authority",
             _ when Has(X509ChainStatusFlags.RevocationStatusUnknown) => "whether the server's certificate was revoked could not be found out",
             _ => "the server's certificate is not valid: " + string.Join(", ", chain.ChainStatus.Select(one => one.Status)),
