@@ -8,7 +8,10 @@ public enum ChannelResult
     /// <summary>The outside stood in the way; the same again may succeed later.</summary>
     TryAgain,
 
-    /// <summary>Somebody has to change something first.</summary>
+    /// <summary>Refused as things stand, a login or a permission: tried again, but seldom.</summary>
+    TryAgainSlowly,
+
+    /// <summary>The same again would be refused for good.</summary>
     Failed,
 }
 
@@ -19,6 +22,8 @@ public sealed record ChannelOutcome(ChannelResult Result, string Reason)
     public static ChannelOutcome Delivered { get; } = new(ChannelResult.Delivered, "");
 
     public static ChannelOutcome TryAgain(string reason) => new(ChannelResult.TryAgain, reason);
+
+    public static ChannelOutcome TryAgainSlowly(string reason) => new(ChannelResult.TryAgainSlowly, reason);
 
     public static ChannelOutcome Failed(string reason) => new(ChannelResult.Failed, reason);
 }

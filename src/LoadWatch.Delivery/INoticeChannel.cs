@@ -9,5 +9,6 @@ public interface INoticeChannel
     string Name { get; }
 
     /// <summary>Trouble with the outside is an outcome, not an exception.</summary>
-    ChannelOutcome Deliver(Notice notice);
+    /// <param name="recipient">As the channel addresses it: a mail address; the contact's id on disk.</param>
+    ChannelOutcome Deliver(Notice notice, string recipient);
 }

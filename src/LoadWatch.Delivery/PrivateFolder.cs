@@ -19,7 +19,7 @@ internal static class PrivateFolder
         }
         catch (UnauthorizedAccessException refused)
         {
-            return ChannelOutcome.Failed(refused.Message);
+            return ChannelOutcome.TryAgainSlowly(refused.Message);
         }
         catch (IOException trouble)
         {

@@ -57,7 +57,8 @@ public sealed record FlaggedReason(
 
 /// <summary>One line about somebody or something.</summary>
 /// <param name="Subject">A name, or a file name.</param>
-public sealed record BriefLine(string Subject, string Sentence);
+/// <param name="OfDelivery">It tells of a notice that did not reach its reader.</param>
+public sealed record BriefLine(string Subject, string Sentence, bool OfDelivery = false);
 
 /// <summary>One group in a compact table, sorted by name.</summary>
 public sealed record BriefGroup(string Id, string Name, string LoadUnit, IReadOnlyList<BriefRow> Rows);

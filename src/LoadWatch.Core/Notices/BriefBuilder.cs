@@ -26,11 +26,11 @@ public static class BriefBuilder
             ContactName = OneLine.Of(contact.Name),
             Date = date,
             DataUpTo = upTo,
-            FirstLine = FirstLine.Of(shown, flagged, upTo, questions.Count, self),
+            FirstLine = FirstLine.Of(shown, flagged, upTo, questions, self),
             Flagged = [.. flagged.Take(FlaggedAtMost).Select(subject => Flag(subject, contact.Role, self))],
             FlaggedBeyond = Math.Max(0, flagged.Count - FlaggedAtMost),
             Returned = [.. shown.SelectMany(subject => Returned(subject, self))],
-            Questions = [.. questions.Select(line => new BriefLine(OneLine.Of(line.Subject), OneLine.Sentence(line.Sentence)))],
+            Questions = [.. questions.Select(line => line with { Subject = OneLine.Of(line.Subject), Sentence = OneLine.Sentence(line.Sentence) })],
             Groups = Groups(contact, shown, upTo ?? date.PlusDays(-1), self),
         };
     }

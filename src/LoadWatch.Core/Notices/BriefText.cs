@@ -31,6 +31,9 @@ public static class BriefText
         return $"Morning brief, {DateInWords(brief.Date)}: {news}";
     }
 
+    /// <summary>The subject of the mail that tells of a changed list.</summary>
+    public static string UpdateSubject(Brief brief) => $"Morning brief, {DateInWords(brief.Date)}: the list changed";
+
     /// <summary>Lines of at most 76 columns ended by line feeds, for a reader who sees nothing else.</summary>
     public static string Write(Brief brief)
     {

@@ -10,15 +10,17 @@ internal static class FirstLine
     /// <param name="shown">Everybody in the brief.</param>
     /// <param name="flagged">Those to act on.</param>
     /// <param name="upTo">The last date looked at.</param>
-    /// <param name="questions">Things that need an answer, count.</param>
-    public static string Of(IReadOnlyList<BriefSubject> shown, IReadOnlyList<BriefSubject> flagged, LocalDate? upTo, int questions, bool self)
+    /// <param name="questions">Things that need an answer.</param>
+    public static string Of(
+        IReadOnlyList<BriefSubject> shown, IReadOnlyList<BriefSubject> flagged, LocalDate? upTo, IReadOnlyList<BriefLine> questions, bool self)
     {
         var sentences = new[]
         {
             self ? OfOne(shown[0], flagged.Count > 0) : OfMany(shown.Count, flagged),
             SeenEarlier(shown, self),
             Unseen(shown, upTo, self),
-            Questions(questions),
+            Questions(questions.Count(line => !line.OfDelivery)),
+            questions.Any(line => line.OfDelivery) ? "Notices did not get through." : null,
         };
         return string.Join(' ', sentences.Where(sentence => sentence is not null));
     }

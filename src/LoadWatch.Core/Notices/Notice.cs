@@ -15,7 +15,14 @@ public sealed record Notice(
     string Subject,
     string Text,
     string Html,
-    NoticeReason Reason);
+    NoticeReason Reason)
+{
+    /// <summary>When it was decided; null for one of before this was kept.</summary>
+    public Instant? Decided { get; init; }
+
+    /// <summary>The <see cref="FlaggedList"/> of that moment; null where nobody had a day yet.</summary>
+    public string? Flagged { get; init; }
+}
 
 /// <summary>Why a notice is told, or not.</summary>
 public enum NoticeReason
@@ -31,4 +38,13 @@ public enum NoticeReason
 
     /// <summary>It was decided before.</summary>
     AlreadyDecided,
+
+    /// <summary>The people to look at are others than in the brief of the day.</summary>
+    ListChanged,
+
+    /// <summary>They are the same.</summary>
+    ListUnchanged,
+
+    /// <summary>The day has no brief with data that could have changed.</summary>
+    NoBriefYet,
 }

@@ -25,4 +25,8 @@ public sealed record Contact(
     IReadOnlyList<string> People,
     DateTimeZone Zone,
     LocalTime BriefAt,
-    IReadOnlySet<IsoDayOfWeek> BriefDays);
+    IReadOnlySet<IsoDayOfWeek> BriefDays)
+{
+    /// <summary>Address for mail, or null for none.</summary>
+    public string? Mail { get; init; }
+}

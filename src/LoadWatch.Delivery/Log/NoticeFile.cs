@@ -11,7 +11,7 @@ public sealed class NoticeFile(string folder) : INoticeChannel
 {
     public string Name => "log";
 
-    public ChannelOutcome Deliver(Notice notice) => Append(folder, notice);
+    public ChannelOutcome Deliver(Notice notice, string recipient) => Append(folder, notice);
 
     public static ChannelOutcome Append(string folder, Notice notice) =>
         PrivateFolder.Use(folder, () => AppendTo(Path.Combine(folder, NameOf(notice)), notice));

@@ -15,7 +15,7 @@ public sealed class PageFile(string folder) : INoticeChannel
 
     public string Name => "page";
 
-    public ChannelOutcome Deliver(Notice notice)
+    public ChannelOutcome Deliver(Notice notice, string recipient)
     {
         if (!IsFileName(notice.ContactId))
         {

@@ -1,4 +1,5 @@
 using LoadWatch.Decoding;
+using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage.Archives;
@@ -23,7 +24,7 @@ public sealed class FileTaker(WorkingConfiguration configuration, Archive archiv
                 }
 
             case UnopenedFile { Trouble: not FileTrouble.Missing } unopened:
-                report.Unreadable.Add($"{file.Path}: {unopened.Reason}");
+                report.Unreadable.Add(new BriefLine(file.Path, unopened.Reason));
                 return null;
             default:
                 return null; // Gone since it was listed.
@@ -38,7 +39,7 @@ public sealed class FileTaker(WorkingConfiguration configuration, Archive archiv
         }
         catch (SourceUnreadableException e)
         {
-            report.Unreadable.Add($"{file.Path}: {e.Message}");
+            report.Unreadable.Add(new BriefLine(file.Path, e.Message));
             return null;
         }
     }
@@ -47,7 +48,7 @@ public sealed class FileTaker(WorkingConfiguration configuration, Archive archiv
     {
         if (opened.Stamp.Size > configuration.LargestFileBytes)
         {
-            report.Unreadable.Add($"{file.Path}: larger than {configuration.LargestFileBytes / (1024 * 1024)} MB");
+            report.Unreadable.Add(new BriefLine(file.Path, $"larger than {configuration.LargestFileBytes / (1024 * 1024)} MB"));
             return null;
         }
 

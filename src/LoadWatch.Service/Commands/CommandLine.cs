@@ -66,6 +66,7 @@ public static class CommandLine
         ExportCommand.Create(),
         RebuildCommand.Create(),
         StatusCommand.Create(),
+        MailTestCommand.Create(),
     };
 
     private static int? Expected(Exception e) => e switch
@@ -73,7 +74,6 @@ public static class CommandLine
         ConfigurationException => ExitCode.Configuration,
         InstanceRunningException => ExitCode.TryLater,
         DatabaseRefusedException or InvalidDataException => ExitCode.Data,
-        DurabilityLostException => ExitCode.InputOutput,
         AggregateException { InnerException: { } inner } => Expected(inner),
         DurabilityLostException => ExitCode.InputOutput,
         DbException database => StoreTroubles.Of(database) switch

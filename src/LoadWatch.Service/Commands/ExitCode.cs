@@ -11,6 +11,9 @@ public static class ExitCode
     /// <summary>The database or the archive is damaged.</summary>
     public const int Data = 65;
 
+    /// <summary>A server that is needed cannot be had, or refuses.</summary>
+    public const int Unavailable = 69;
+
     /// <summary>A defect of LoadWatch.</summary>
     public const int Software = 70;
 

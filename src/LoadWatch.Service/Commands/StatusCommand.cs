@@ -3,6 +3,7 @@ using System.Text.Json;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Export;
 using LoadWatch.Service.Health;
+using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 
 namespace LoadWatch.Service.Commands;
@@ -35,6 +36,7 @@ public static class StatusCommand
             StatusFile.Read(workplace.Folder.Root),
             Enum.GetValues<ArrivalState>().ToDictionary(state => Words.Of(state), state => counts.GetValueOrDefault(state), StringComparer.Ordinal),
             session.Notices.PendingDeliveries().Count,
+            [.. session.Notices.MissedDeliveries().Select(missed => $"{MissedNotices.Subject(missed.Channel, missed.Contact)} {MissedNotices.Sentence(missed)}")],
             workplace.Configuration.People.Count);
     }
 
@@ -49,9 +51,9 @@ public static class StatusCommand
             : [];
         return string.Join(
             Environment.NewLine,
-            [$"LoadWatch {summary.Version}", sweep, $"Arrivals: {arrivals}", $"People: {summary.People}; deliveries waiting: {summary.DeliveriesWaiting}", .. faults]);
+            [$"LoadWatch {summary.Version}", sweep, $"Arrivals: {arrivals}", $"People: {summary.People}; deliveries waiting: {summary.DeliveriesWaiting}", .. faults, .. summary.Undelivered]);
     }
 
     private sealed record StatusSummary(
-        string Version, StatusLine? Service, IReadOnlyDictionary<string, int> Arrivals, int DeliveriesWaiting, int People);
+        string Version, StatusLine? Service, IReadOnlyDictionary<string, int> Arrivals, int DeliveriesWaiting, IReadOnlyList<string> Undelivered, int People);
 }

@@ -31,8 +31,9 @@ public static class SweepCommand
     {
         Console.Out.WriteLine(Counts(report));
         foreach (var line in report.MissingInboxes.Select(name => $"The inbox \"{name}\" cannot be listed.")
-            .Concat(report.Unreadable.Select(line => $"Left alone: {line}"))
-            .Concat(report.Undelivered.Select(line => $"Not delivered yet: {line}")))
+            .Concat(report.Unreadable.Select(line => $"Left alone: {line.Subject}: {line.Sentence}"))
+            .Concat(report.Undelivered.Select(line => $"Not delivered yet: {line}"))
+            .Concat(report.GivenUp.Select(line => $"Not delivered, given up: {line}")))
         {
             Console.Error.WriteLine(line);
         }

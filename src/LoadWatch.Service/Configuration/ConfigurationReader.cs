@@ -54,6 +54,7 @@ public sealed class ConfigurationReader
         var people = (roster ?? []).ToDictionary(person => person.Id, StringComparer.OrdinalIgnoreCase);
         var anchors = faults.Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList()));
         var contacts = ContactsReader.Read(file, groups, roster is null ? null : people, zone, faults);
+        var mail = new MailReader(Resolve, faults.Add).Read(file);
         faults.Stop();
 
         var (hash, text) = Version(json, file);
@@ -73,7 +74,10 @@ public sealed class ConfigurationReader
             computation,
             Duration.FromSeconds(file.Intake.ScanSeconds),
             Duration.FromSeconds(file.Intake.SettleSeconds),
-            file.Intake.LargestFileMegabytes * 1024L * 1024L);
+            file.Intake.LargestFileMegabytes * 1024L * 1024L)
+        {
+            Mail = mail,
+        };
     }
 
     private LoadWatchFile Parse(byte[] json)

@@ -38,7 +38,10 @@ internal static class ContactsReader
                 entry.People,
                 faults.Zone(entry.TimeZone, $"$.contacts[{i}].time_zone") ?? zone,
                 LocalTimePattern.CreateWithInvariantCulture("HH:mm").Parse(entry.BriefAt).Value,
-                entry.BriefDays.ToHashSet()));
+                entry.BriefDays.ToHashSet())
+            {
+                Mail = entry.Mail.Length > 0 ? entry.Mail : null,
+            });
         }
 
         return contacts;

@@ -52,6 +52,9 @@ public sealed record LoadWatchFile
 
     /// <summary>How the service looks for files.</summary>
     public IntakeEntry Intake { get; init; } = new();
+
+    /// <summary>The server that takes mail.</summary>
+    public MailEntry Mail { get; init; } = new();
 }
 
 /// <summary>One watched folder.</summary>
@@ -127,6 +130,9 @@ public sealed record ContactEntry
 
     /// <summary>IANA zone; blank takes the common one.</summary>
     public string TimeZone { get; init; } = "";
+
+    /// <summary>Address for mail; blank for none.</summary>
+    public string Mail { get; init; } = "";
 }
 
 /// <summary>What may be set of the computation.</summary>

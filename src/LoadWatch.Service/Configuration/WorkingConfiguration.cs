@@ -1,5 +1,6 @@
 using LoadWatch.Activities;
 using LoadWatch.Decoding.Csv;
+using LoadWatch.Delivery.Mail;
 using LoadWatch.People;
 using NodaTime;
 
@@ -29,6 +30,9 @@ public sealed record WorkingConfiguration(
     Duration Settle,
     long LargestFileBytes)
 {
+    /// <summary>The mail server; null when there is none.</summary>
+    public MailSettings? Mail { get; init; }
+
     /// <summary>The people whom a contact's brief is about, sorted by id.</summary>
     public IEnumerable<Person> PeopleOf(Contact contact) =>
         People.Values

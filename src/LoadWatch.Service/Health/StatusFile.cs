@@ -22,7 +22,7 @@ public sealed class StatusFile(Workplace workplace)
     /// <param name="configurationFault">Why the configuration on disk is not the one in force, or null.</param>
     public void Write(Instant now, SweepReport report, string? configurationFault) =>
         Write(new StatusLine(
-            Words.Utc(now)!, true, null, configurationFault, report.MissingInboxes, report.Unreadable.Count, report.Settling, report.Undelivered.Count));
+            Words.Utc(now)!, true, null, configurationFault, report.MissingInboxes, report.Unreadable.Count, report.Settling, report.Missed));
 
     public void WriteFailure(Instant now, Exception failure) =>
         Write(new StatusLine(Words.Utc(now)!, false, failure.GetType().Name, null, [], 0, 0, 0));
@@ -31,6 +31,7 @@ public sealed class StatusFile(Workplace workplace)
 }
 
 /// <param name="LastSweep">UTC.</param>
+/// <param name="Undelivered">Contacts and channels by which nothing got through at the last try.</param>
 /// <param name="Failure">Kind of the failure that ended the sweep, or null.</param>
 public sealed record StatusLine(
     string LastSweep,

@@ -13,48 +13,96 @@ using NodaTime;
 namespace LoadWatch.Service.Pipeline;
 
 /// <summary>Builds the briefs of contacts from what is stored, and decides those that are due.</summary>
-public sealed class Briefs(WorkingConfiguration configuration, Instant now)
+/// <param name="unreadable">Files that the sweep could not read, by path.</param>
+public sealed class Briefs(WorkingConfiguration configuration, Instant now, IReadOnlyList<BriefLine> unreadable)
 {
     private const int DaysBack = 400;
     private const int RemarkDays = 14;
     private const int RefusedDays = 7;
+    private const string Mail = "mail";
 
-    /// <summary>Where a notice goes. Mail joins here.</summary>
-    public static IReadOnlyList<string> Channels { get; } = ["page", "log"];
-
-    /// <summary>Freezes every brief that is due, with its deliveries.</summary>
+    /// <summary>Freezes every brief that is due, and every update of a changed list, with its deliveries.</summary>
     /// <returns>How many were decided.</returns>
-    public int Decide(StoreSession session)
+    public int Decide(StoreSession session) => configuration.Contacts.Count(contact => DecideBrief(session, contact) || DecideUpdate(session, contact));
+
+    private bool DecideBrief(StoreSession session, Contact contact)
     {
-        var due = configuration.Contacts
-            .Where(contact => NoticePolicy.Decide(contact, now, session.Notices.Exists) == NoticeReason.BriefDue)
-            .ToList();
-        foreach (var contact in due)
+        var last = session.Notices.LastBrief(contact.Id, LocalDate.MaxIsoValue)?.Date;
+        if (NoticePolicy.Decide(contact, now, last, session.Notices.Exists) is not { Reason: NoticeReason.BriefDue, Date: var date })
         {
-            var brief = Build(session, contact);
-            var notice = new Notice(
-                NoticePolicy.BriefKey(contact, brief.Date),
-                contact.Id,
-                brief.Date,
-                BriefText.Subject(brief),
-                BriefText.Write(brief),
-                PageRenderer.Render(brief),
-                NoticeReason.BriefDue);
-            session.Notices.Add(notice, session.Alerts.Changes.LastPosition(), Channels.Select(channel => new Storage.Notices.Delivery(channel, contact.Id)).ToList());
+            return false;
         }
 
-        return due.Count;
+        var brief = Build(session, contact, date);
+        var notice = new Notice(
+            NoticePolicy.BriefKey(contact, brief.Date),
+            contact.Id,
+            brief.Date,
+            BriefText.Subject(brief),
+            BriefText.Write(brief),
+            PageRenderer.Render(brief),
+            NoticeReason.BriefDue);
+        var flagged = brief.DataUpTo is null ? null : Flagged(session, contact);
+        return Freeze(session, notice with { Flagged = flagged }, Ways(contact));
     }
 
+    /// <summary>Only mail is told twice: the page is rewritten anyway.</summary>
+    private bool DecideUpdate(StoreSession session, Contact contact)
+    {
+        var date = now.InZone(contact.Zone).Date;
+        var ways = Ways(contact).Where(way => way.Channel == Mail).ToList();
+        if (ways.Count == 0 || session.Notices.Get(NoticePolicy.BriefKey(contact, date))?.Flagged is not { } told)
+        {
+            return false;
+        }
+
+        var standing = Flagged(session, contact);
+        if (NoticePolicy.DecideUpdate(contact, date, told, standing, session.Notices.Exists) != NoticeReason.ListChanged)
+        {
+            return false;
+        }
+
+        var built = Build(session, contact);
+        var brief = built with { FirstLine = $"{FlaggedList.ChangeInWords(told, standing)} {built.FirstLine}" };
+        var notice = new Notice(
+            NoticePolicy.UpdateKey(contact, date),
+            contact.Id,
+            date,
+            BriefText.UpdateSubject(brief),
+            BriefText.Write(brief),
+            PageRenderer.Render(brief),
+            NoticeReason.ListChanged);
+        return Freeze(session, notice with { Flagged = standing }, ways);
+    }
+
+    private bool Freeze(StoreSession session, Notice notice, IReadOnlyList<Storage.Notices.Delivery> ways) =>
+        session.Notices.Add(notice with { Decided = now }, session.Alerts.Changes.LastPosition(), ways);
+
+    /// <summary>Where a contact's notices go.</summary>
+    private List<Storage.Notices.Delivery> Ways(Contact contact)
+    {
+        List<Storage.Notices.Delivery> ways = [new("page", contact.Id), new("log", contact.Id)];
+        if (configuration.Mail is not null && contact.Mail is { } address)
+        {
+            ways.Add(new Storage.Notices.Delivery(Mail, address));
+        }
+
+        return ways;
+    }
+
+    private string Flagged(StoreSession session, Contact contact) =>
+        FlaggedList.Of(configuration.PeopleOf(contact).SelectMany(person => session.Alerts.Open(person.Id)));
+
     /// <summary>The contact's brief as of now, due or not.</summary>
-    public Brief Build(StoreSession session, Contact contact)
+    public Brief Build(StoreSession session, Contact contact) => Build(session, contact, now.InZone(contact.Zone).Date);
+
+    private Brief Build(StoreSession session, Contact contact, LocalDate date)
     {
         // New is what no brief of an earlier date told: the page of a morning stays the same after that morning's brief was decided.
-        var today = now.InZone(contact.Zone).Date;
-        var told = session.Notices.LastBrief(contact.Id, today)?.AlertPosition ?? 0;
+        var told = session.Notices.LastBrief(contact.Id, date)?.AlertPosition ?? 0;
         var news = session.Alerts.Changes.Since(told).ToLookup(change => change.AlertId, StringComparer.Ordinal);
         var subjects = configuration.PeopleOf(contact).Select(person => Subject(session, person, news)).ToList();
-        return BriefBuilder.Build(contact, today, subjects, Questions(session, contact));
+        return BriefBuilder.Build(contact, date, subjects, Questions(session, contact));
     }
 
     private BriefSubject Subject(StoreSession session, Person person, ILookup<string, AlertChange> news)
@@ -87,28 +135,27 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now)
             : [$"load unknown on {without} of {recorded.Count} recorded days of the last {RemarkDays}: no usable heart rate, or a reference value is missing"];
     }
 
-    private List<BriefLine> Questions(StoreSession session, Contact contact)
-    {
-        if (contact.People.Count > 0)
-        {
-            return [];
-        }
+    private List<BriefLine> Questions(StoreSession session, Contact contact) =>
+        [.. MissedNotices.Lines(session, contact, Ways(contact), now), .. Files(session, contact)];
 
+    private List<BriefLine> Files(StoreSession session, Contact contact)
+    {
         var people = configuration.PeopleOf(contact).Select(person => person.Id).ToHashSet(StringComparer.Ordinal);
         return session.Arrivals.All()
             .Where(arrival => arrival.State is ArrivalState.Held or ArrivalState.Refused)
             .Select(arrival => (arrival, Sightings: session.Sightings.Of(arrival.Sha)))
-            .Where(item => Concerns(item.Sightings, people) && (item.arrival.State == ArrivalState.Held || IsRecent(item.Sightings)))
+            .Where(item => Concerns(item.Sightings.Select(sighting => sighting.Path), contact, people) && (item.arrival.State == ArrivalState.Held || IsRecent(item.Sightings)))
             .Select(item => new BriefLine(item.Sightings[0].Path, Sentence(item.arrival)))
+            .Concat(unreadable.Where(line => Concerns([line.Subject], contact, people)).Select(line => line with { Sentence = $"cannot be read: {line.Sentence}" }))
             .OrderBy(line => line.Subject, StringComparer.Ordinal)
             .ToList();
     }
 
     /// <summary>Files of nobody concern every contact of a group; files of somebody only those who are told about that person.</summary>
-    private bool Concerns(IReadOnlyList<Sighting> sightings, HashSet<string> people)
+    private bool Concerns(IEnumerable<string> paths, Contact contact, HashSet<string> people)
     {
-        var claims = Attribution.Claims(sightings.Select(sighting => sighting.Path), configuration.People);
-        return claims.Count == 0 || claims.Any(people.Contains);
+        var claims = Attribution.Claims(paths, configuration.People);
+        return claims.Count == 0 ? contact.People.Count == 0 : claims.Any(people.Contains);
     }
 
     private bool IsRecent(IReadOnlyList<Sighting> sightings) =>

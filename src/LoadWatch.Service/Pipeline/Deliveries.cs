@@ -1,57 +1,79 @@
 using LoadWatch.Delivery;
 using LoadWatch.Delivery.Log;
+using LoadWatch.Delivery.Mail;
 using LoadWatch.Delivery.Page;
+using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
+using LoadWatch.Storage.Notices;
+using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
 
-/// <summary>Sends what was decided and writes down "sent" only after the channel took it (I-7).</summary>
-public sealed class Deliveries(WorkingConfiguration configuration, Store store, Briefs briefs, SweepReport report)
+/// <summary>Sends what was decided and is due, and writes down "sent" only after the channel took it (I-7).</summary>
+public sealed class Deliveries(Store store, IReadOnlyList<INoticeChannel> channels, SweepReport report)
 {
-    private readonly IReadOnlyDictionary<string, INoticeChannel> channels = new INoticeChannel[]
+    /// <summary>The channels of a configuration, those on disk first: they answer at once.</summary>
+    public static IReadOnlyList<INoticeChannel> Channels(WorkingConfiguration configuration)
     {
-        new PageFile(configuration.PagesFolder),
-        new NoticeFile(configuration.NoticesFolder),
-    }.ToDictionary(channel => channel.Name, StringComparer.Ordinal);
+        INoticeChannel[] local = [new PageFile(configuration.PagesFolder), new NoticeFile(configuration.NoticesFolder)];
+        return configuration.Mail is { } mail ? [.. local, new MailChannel(mail)] : local;
+    }
 
-    public void Run()
+    public void Run(Instant now)
     {
-        foreach (var (notice, (channel, recipient), _, _) in store.Read(session => session.Notices.PendingDeliveries()))
+        var due = store.Read(session => session.Notices.DueDeliveries(now));
+        foreach (var pending in due.OrderBy(pending => Place(pending.Delivery.Channel)))
         {
-            var outcome = channels[channel].Deliver(notice);
-            KillPoint.Pass("delivered");
-            if (outcome.Result == ChannelResult.Delivered)
-            {
-                store.Write(session => session.Notices.MarkDelivered(notice.Key, channel, recipient));
-            }
-            else
-            {
-                store.Write(session => session.Notices.MarkFailed(notice.Key, channel, recipient, outcome.Reason));
-                report.Undelivered.Add($"{channel} of {notice.Key}: {outcome.Reason}");
-            }
-
+            Settle(pending, Attempt(pending), now);
             report.Advanced();
+        }
+
+        report.Missed = store.Read(session => session.Notices.MissedDeliveries()).Count;
+    }
+
+    /// <summary>In the channels' order; one that is no longer configured comes first, it takes no time.</summary>
+    private int Place(string channel) => channels.ToList().FindIndex(known => known.Name == channel);
+
+    private ChannelOutcome Attempt(PendingDelivery pending)
+    {
+        var channel = channels.FirstOrDefault(channel => channel.Name == pending.Delivery.Channel);
+        if (channel is null)
+        {
+            return ChannelOutcome.TryAgainSlowly($"{pending.Delivery.Channel} is not configured");
+        }
+
+        var outcome = channel.Deliver(pending.Notice, pending.Delivery.Recipient);
+        KillPoint.Pass("delivered");
+        return outcome;
+    }
+
+    private void Settle(PendingDelivery pending, ChannelOutcome outcome, Instant now)
+    {
+        var (key, way) = (pending.Notice.Key, pending.Delivery);
+        if (outcome.Result == ChannelResult.Delivered)
+        {
+            store.Write(session => session.Notices.MarkDelivered(key, way));
+        }
+        else if (Next(pending, outcome.Result, now) is { } next)
+        {
+            store.Write(session => session.Notices.MarkTryAgain(key, way, outcome.Reason, now, next));
+            report.Undelivered.Add($"{way.Channel} of {key}: {outcome.Reason}");
+        }
+        else
+        {
+            var state = outcome.Result == ChannelResult.Failed ? DeliveryState.Failed : DeliveryState.Expired;
+            store.Write(session => session.Notices.MarkGivenUp(key, way, outcome.Reason, state, now));
+            report.GivenUp.Add($"{way.Channel} of {key}: {outcome.Reason}");
         }
     }
 
-    /// <summary>Every contact's page as of now: "not in yet" becomes "in" without waiting for the next brief.</summary>
-    public void RewritePages()
+    /// <summary>Null when it is not tried again.</summary>
+    private static Instant? Next(PendingDelivery pending, ChannelResult result, Instant now)
     {
-        foreach (var contact in configuration.Contacts)
-        {
-            var html = PageRenderer.Render(store.Read(session => briefs.Build(session, contact)));
-            var outcome = PageFile.Write(configuration.PagesFolder, contact.Id, html);
-            if (outcome.Result == ChannelResult.Delivered)
-            {
-                report.Pages.Add(Path.Combine(configuration.PagesFolder, $"{contact.Id}.html"));
-            }
-            else
-            {
-                report.Undelivered.Add($"page of {contact.Id}: {outcome.Reason}");
-            }
-
-            report.Advanced();
-        }
+        var trouble = result == ChannelResult.TryAgainSlowly ? DeliveryTrouble.Standing : DeliveryTrouble.Passing;
+        return result == ChannelResult.Failed
+            ? null
+            : DeliverySchedule.Next(pending.FirstAttempt ?? now, now, pending.Attempts + 1, trouble);
     }
 }

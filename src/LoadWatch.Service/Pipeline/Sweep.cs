@@ -18,6 +18,7 @@ public sealed class Sweep
     private readonly Settlement settlement;
     private readonly Intake intake;
     private readonly Recovery recovery;
+    private readonly MovedFiles moved;
     private readonly Briefs briefs;
     private readonly ArchiveReader reader;
 
@@ -33,7 +34,8 @@ public sealed class Sweep
         settlement = new Settlement(configuration, store, decoder, Report);
         intake = new Intake(configuration, store, archive, decoders, settlement, now, Report);
         recovery = new Recovery(store, archive, reader, settlement, probe);
-        briefs = new Briefs(configuration, now);
+        moved = new MovedFiles(configuration, store, reader, settlement, now);
+        briefs = new Briefs(configuration, now, Report.Unreadable);
     }
 
     public SweepReport Report { get; } = new();
@@ -43,7 +45,9 @@ public sealed class Sweep
         AdoptConfiguration(cancel);
         recovery.Run(cancel);
         Inboxes.MakePersonFolders(configuration);
+        InboxRemoval.PutBack(configuration);
         intake.TakeIn(Inboxes.Changed(configuration, store, Report), cancel);
+        moved.TakeUp();
         Evaluate(cancel);
         return Report;
     }
@@ -126,8 +130,7 @@ public sealed class Sweep
         new DayUpdate(configuration, store, now, Report).Run(cancel);
         store.Write(new Evaluation(configuration, briefs, now, Report).Run);
         KillPoint.Pass("evaluated");
-        var deliveries = new Deliveries(configuration, store, briefs, Report);
-        deliveries.Run();
-        deliveries.RewritePages();
+        new Deliveries(store, Deliveries.Channels(configuration), Report).Run(now);
+        new Pages(configuration, store, briefs, Report).Rewrite(now);
     }
 }

@@ -1,3 +1,4 @@
+using LoadWatch.Notices;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Service.Pipeline;
@@ -14,8 +15,8 @@ public sealed class SweepReport
     /// <summary>Files that may still be growing and are looked at again.</summary>
     public int Settling { get; set; }
 
-    /// <summary>Files that could not be opened or read, with the reason; looked at again.</summary>
-    public List<string> Unreadable { get; } = [];
+    /// <summary>Files that could not be opened or read, by path, with the reason; looked at again.</summary>
+    public List<BriefLine> Unreadable { get; } = [];
 
     /// <summary>Inboxes that could not be listed.</summary>
     public List<string> MissingInboxes { get; } = [];
@@ -35,8 +36,17 @@ public sealed class SweepReport
     /// <summary>Deliveries that did not go through and are tried again, with the reason.</summary>
     public List<string> Undelivered { get; } = [];
 
+    /// <summary>Deliveries that are not tried again, with the reason.</summary>
+    public List<string> GivenUp { get; } = [];
+
+    /// <summary>Contacts and channels by which nothing got through at the last try.</summary>
+    public int Missed { get; set; }
+
     /// <summary>Pages that stand after the sweep.</summary>
     public List<string> Pages { get; } = [];
+
+    /// <summary>Whether anything happened that a page could show.</summary>
+    public bool HasNews => Settled.Count + PeopleComputed + AlertChanges + NoticesDecided + Undelivered.Count + GivenUp.Count + Unreadable.Count > 0;
 
     public int CountOf(ArrivalState state) => Settled.GetValueOrDefault(state);
 

@@ -96,5 +96,10 @@ public sealed class SweepJob(
         {
             LogMessages.DeliveryFailed(log, undelivered);
         }
+
+        foreach (var given in report.GivenUp)
+        {
+            LogMessages.DeliveryGivenUp(log, given);
+        }
     }
 }

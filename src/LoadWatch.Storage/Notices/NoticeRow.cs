@@ -33,6 +33,14 @@ internal sealed class NoticeRow
 
     public string? LastError { get; init; }
 
+    public Instant? FirstAttempt { get; init; }
+
+    public string State { get; init; } = "";
+
+    public Instant? Decided { get; init; }
+
+    public string? Flagged { get; init; }
+
     public static NoticeRow From(Notice notice, long alertPosition) => new()
     {
         Key = notice.Key,
@@ -44,9 +52,16 @@ internal sealed class NoticeRow
         Html = notice.Html,
         Reason = Words<NoticeReason>.Of(notice.Reason),
         AlertPosition = alertPosition,
+        Decided = notice.Decided,
+        Flagged = notice.Flagged,
     };
 
-    public Notice ToNotice() => new(Key, Contact, Date, Subject, Text, Html, Words<NoticeReason>.Parse(Reason));
+    public Notice ToNotice() => new(Key, Contact, Date, Subject, Text, Html, Words<NoticeReason>.Parse(Reason)) { Decided = Decided, Flagged = Flagged };
+
+    public PendingDelivery ToPending() =>
+        new(ToNotice(), new Delivery(Channel, Recipient), Attempts, LastError) { FirstAttempt = FirstAttempt };
+
+    public MissedDelivery ToMissed() => new(Contact, Channel, Date, FirstAttempt, Words<DeliveryState>.Parse(State), LastError ?? "");
 
     private static string KindOf(Notice notice)
     {

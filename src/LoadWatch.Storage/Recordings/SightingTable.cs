@@ -16,6 +16,7 @@ public sealed class SightingTable
         ON CONFLICT (inbox, path, sha) DO UPDATE SET size = excluded.size, mtime = excluded.mtime, file_id = excluded.file_id, latest = 1
         """;
 
+    private const string Delete = "DELETE FROM sighting WHERE inbox = @Inbox AND path = @Path AND sha = @Sha";
     private const string SelectLatest = $"SELECT {Columns} FROM sighting WHERE inbox = @inbox AND latest = 1";
     private const string SelectOf = $"SELECT {Columns} FROM sighting WHERE sha = @sha";
 
@@ -33,6 +34,9 @@ public sealed class SightingTable
         session.Execute(Outdate, new { inbox, path, sha });
         session.Execute(Insert, new { inbox, path, sha, firstSeen, stamp.Size, stamp.ModifiedUnixMs, stamp.FileId });
     }
+
+    /// <summary>Drops a name that a content no longer has.</summary>
+    public void Forget(Sighting sighting) => session.Execute(Delete, new { sighting.Inbox, sighting.Path, sighting.Sha });
 
     /// <summary>Every name of a content, sorted by path and inbox, ordinally: the first is the one shown (I-5).</summary>
     public IReadOnlyList<Sighting> Of(string sha) =>

@@ -14,10 +14,10 @@ public sealed class NoticeFileTests : IDisposable
     public void ANoticeIsAppendedOnceHoweverOftenItIsDelivered()
     {
         var channel = new NoticeFile(temporary.FullName);
-        Assert.Equal(ChannelOutcome.Delivered, channel.Deliver(Notice(1)));
-        Assert.Equal(ChannelOutcome.Delivered, channel.Deliver(Notice(1)));
-        Assert.Equal(ChannelOutcome.Delivered, channel.Deliver(Notice(2)));
-        Assert.Equal(ChannelOutcome.Delivered, channel.Deliver(Notice(1)));
+        Assert.Equal(ChannelOutcome.Delivered, channel.Deliver(Notice(1), "ada"));
+        Assert.Equal(ChannelOutcome.Delivered, channel.Deliver(Notice(1), "ada"));
+        Assert.Equal(ChannelOutcome.Delivered, channel.Deliver(Notice(2), "ada"));
+        Assert.Equal(ChannelOutcome.Delivered, channel.Deliver(Notice(1), "ada"));
         Assert.Equal(
             [
                 "2026-03-01 ada 1/3 [ada|brief|2026-03-01] Morning brief",
@@ -90,7 +90,7 @@ public sealed class NoticeFileTests : IDisposable
     public void AFolderInTheFilesPlaceIsAnOutcome()
     {
         Directory.CreateDirectory(March);
-        Assert.Equal(ChannelResult.Failed, NoticeFile.Append(temporary.FullName, Notice(1)).Result);
+        Assert.Equal(ChannelResult.TryAgainSlowly, NoticeFile.Append(temporary.FullName, Notice(1)).Result);
     }
 
     public void Dispose() => temporary.Delete(recursive: true);

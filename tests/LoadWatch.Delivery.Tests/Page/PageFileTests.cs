@@ -13,8 +13,8 @@ public sealed class PageFileTests : IDisposable
     [Fact]
     public void ANoticeBecomesTheNewestPageAndADatedOne()
     {
-        Assert.Equal(ChannelOutcome.Delivered, new PageFile(Folder).Deliver(Notice(1, "<p>one")));
-        Assert.Equal(ChannelOutcome.Delivered, new PageFile(Folder).Deliver(Notice(2, "<p>two")));
+        Assert.Equal(ChannelOutcome.Delivered, new PageFile(Folder).Deliver(Notice(1, "<p>one"), "ada"));
+        Assert.Equal(ChannelOutcome.Delivered, new PageFile(Folder).Deliver(Notice(2, "<p>two"), "ada"));
         Assert.Equal(["ada-2026-03-01.html", "ada-2026-03-02.html", "ada.html"], Names());
         Assert.Equal("<p>two", Read("ada.html"));
         Assert.Equal("<p>one", Read("ada-2026-03-01.html"));
@@ -23,8 +23,8 @@ public sealed class PageFileTests : IDisposable
     [Fact]
     public void ALateNoticeDoesNotCoverAYoungerPage()
     {
-        new PageFile(Folder).Deliver(Notice(2, "<p>two"));
-        new PageFile(Folder).Deliver(Notice(1, "<p>one"));
+        new PageFile(Folder).Deliver(Notice(2, "<p>two"), "ada");
+        new PageFile(Folder).Deliver(Notice(1, "<p>one"), "ada");
         Assert.Equal("<p>two", Read("ada.html"));
         Assert.Equal("<p>one", Read("ada-2026-03-01.html"));
     }
@@ -75,7 +75,7 @@ public sealed class PageFileTests : IDisposable
     public void AnIdThatIsNoFileNameIsRefused(string id)
     {
         Assert.Equal(ChannelResult.Failed, PageFile.Write(Folder, id, "<p>").Result);
-        Assert.Equal(ChannelResult.Failed, new PageFile(Folder).Deliver(Notice(1, "<p>") with { ContactId = id }).Result);
+        Assert.Equal(ChannelResult.Failed, new PageFile(Folder).Deliver(Notice(1, "<p>") with { ContactId = id }, id).Result);
         Assert.Empty(temporary.EnumerateFileSystemInfos());
     }
 

@@ -1,5 +1,6 @@
 using LoadWatch.Notices;
 using LoadWatch.Storage.Notices;
+using NodaTime;
 
 namespace LoadWatch.Storage.Tests.Notices;
 
@@ -52,7 +53,7 @@ public sealed class NoticeTableTests(SharedFolder shared) : StoreTest(shared)
         var notice = Some.Notice("coach", Some.Date);
         Add(notice, Mail, File);
 
-        Store.Write(session => session.Notices.MarkDelivered(notice.Key, File.Channel, File.Recipient));
+        Store.Write(session => session.Notices.MarkDelivered(notice.Key, File));
 
         Assert.Equal(Mail, Assert.Single(Store.Read(session => session.Notices.PendingDeliveries())).Delivery);
     }
@@ -63,10 +64,76 @@ public sealed class NoticeTableTests(SharedFolder shared) : StoreTest(shared)
         var notice = Some.Notice("coach", Some.Date);
         Add(notice, Mail);
 
-        Store.Write(session => session.Notices.MarkFailed(notice.Key, Mail.Channel, Mail.Recipient, "450 try later"));
-        Store.Write(session => session.Notices.MarkFailed(notice.Key, Mail.Channel, Mail.Recipient, "no route"));
+        Store.Write(session => session.Notices.MarkTryAgain(notice.Key, Mail, "450 try later", At(0), At(1)));
+        Store.Write(session => session.Notices.MarkTryAgain(notice.Key, Mail, "no route", At(1), At(3)));
 
-        Assert.Equal(new PendingDelivery(notice, Mail, 2, "no route"), Assert.Single(Store.Read(session => session.Notices.PendingDeliveries())));
+        Assert.Equal(
+            new PendingDelivery(notice, Mail, 2, "no route") { FirstAttempt = At(0) },
+            Assert.Single(Store.Read(session => session.Notices.PendingDeliveries())));
+    }
+
+    [Fact]
+    public void ADeliveryIsDueAtOnceAndThenWhenItsTimeHasCome()
+    {
+        var notice = Some.Notice("coach", Some.Date);
+        Add(notice, Mail, File);
+        Assert.Equal(2, Due(At(0)).Count);
+
+        Store.Write(session => session.Notices.MarkTryAgain(notice.Key, Mail, "450 try later", At(0), At(2)));
+
+        Assert.Equal([File], Due(At(1)));
+        Assert.Equal([File, Mail], Due(At(2)));
+    }
+
+    [Theory]
+    [InlineData(DeliveryState.Failed)]
+    [InlineData(DeliveryState.Expired)]
+    public void AGivenUpDeliveryIsNeverDueAndStaysOnRecord(DeliveryState state)
+    {
+        var notice = Some.Notice("coach", Some.Date);
+        Add(notice, Mail);
+
+        Store.Write(session => session.Notices.MarkGivenUp(notice.Key, Mail, "550 nobody here", state, At(5)));
+
+        Assert.Empty(Due(At(9999)));
+        Assert.Empty(Store.Read(session => session.Notices.PendingDeliveries()));
+        Assert.Equal([new MissedDelivery("coach", "mail", Some.Date, At(5), state, "550 nobody here")], Missed());
+    }
+
+    [Fact]
+    public void TheOldestMissedDeliveryOfAContactAndChannelIsTold()
+    {
+        var days = Enumerable.Range(0, 3).Select(day => Some.Notice("coach", Some.Date.PlusDays(day))).ToList();
+        days.ForEach(notice => Add(notice, Mail, File));
+        Add(Some.Notice("doctor", Some.Date), Mail);
+
+        days.ForEach(notice => Store.Write(session => session.Notices.MarkTryAgain(notice.Key, Mail, "no route", At(0), At(1))));
+
+        Assert.Equal([new MissedDelivery("coach", "mail", Some.Date, At(0), DeliveryState.Pending, "no route")], Missed());
+    }
+
+    [Fact]
+    public void ALaterNoticeThatGotThroughEndsTheReport()
+    {
+        var first = Some.Notice("coach", Some.Date);
+        var second = Some.Notice("coach", Some.Date.PlusDays(1));
+        Add(first, Mail);
+        Add(second, Mail);
+        Store.Write(session => session.Notices.MarkGivenUp(first.Key, Mail, "550 nobody here", DeliveryState.Failed, At(0)));
+        Assert.Single(Missed());
+
+        Store.Write(session => session.Notices.MarkDelivered(second.Key, Mail));
+
+        Assert.Empty(Missed());
+    }
+
+    [Fact]
+    public void WhenANoticeWasDecidedAndWhomItFlaggedIsKept()
+    {
+        var notice = Some.Notice("coach", Some.Date) with { Decided = At(7), Flagged = "ann\nbob" };
+        Add(notice);
+
+        Assert.Equal(notice, Store.Read(session => session.Notices.Get(notice.Key)));
     }
 
     [Fact]
@@ -87,6 +154,12 @@ public sealed class NoticeTableTests(SharedFolder shared) : StoreTest(shared)
     [InlineData("coach||2026-03-01")]
     public void AKeyThatIsNotThatOfTheNoticeIsRefused(string key) =>
         Assert.Throws<ArgumentException>(() => Add(Some.Notice("coach", Some.Date) with { Key = key }));
+
+    private static Instant At(int minute) => Instant.FromUtc(2026, 3, 1, 5, 30) + Duration.FromMinutes(minute);
+
+    private List<Delivery> Due(Instant now) => [.. Store.Read(session => session.Notices.DueDeliveries(now)).Select(pending => pending.Delivery)];
+
+    private IReadOnlyList<MissedDelivery> Missed() => Store.Read(session => session.Notices.MissedDeliveries());
 
     private bool Add(Notice notice, params Delivery[] deliveries) => Store.Write(session => session.Notices.Add(notice, 0, deliveries));
 }
