@@ -1,4 +1,5 @@
 using System.Diagnostics;
+using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Commands;
 using LoadWatch.Service.Tests.Pipeline;
@@ -154,7 +155,7 @@ public sealed class IntakeTests : IDisposable
     {
         folder.Put("anna/huge.fit", new byte[(1024 * 1024) + 1]);
         folder.Put("anna/ride.fit", Some.Fit(Some.Yesterday));
-        Assert.Equal("anna/huge.fit: larger than 1 MB", Assert.Single(folder.Sweep().Unreadable));
+        Assert.Equal(new BriefLine("anna/huge.fit", "larger than 1 MB"), Assert.Single(folder.Sweep().Unreadable));
         Assert.Equal(ArrivalState.Stored, Assert.Single(folder.Arrivals()).State);
         Assert.Single(folder.ArchiveNames());
     }
