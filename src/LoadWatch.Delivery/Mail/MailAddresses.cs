@@ -20,9 +20,10 @@ public static class MailAddresses
     private static bool IsPlain(string text) =>
         text.Length is > 0 and <= 254 && !text.Any(letter => char.IsControl(letter) || char.IsWhiteSpace(letter) || letter is '"' or '<' or '>' or ',' or ';');
 
+    /// <summary>A domain may be written in any script, but few servers take a name before the @ outside ASCII.</summary>
     private static bool HasTwoParts(string text)
     {
         var at = text.LastIndexOf('@');
-        return at > 0 && at < text.Length - 1;
+        return at > 0 && at < text.Length - 1 && text[..at].All(char.IsAscii);
     }
 }

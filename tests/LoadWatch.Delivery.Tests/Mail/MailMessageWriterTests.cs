@@ -82,6 +82,8 @@ public sealed class MailMessageWriterTests
     [Theory]
     [InlineData("ada@example.org", true)]
     [InlineData("ada.merriweather+brief@mail.example.org", true)]
+    [InlineData("ada@bücher.example", true)]
+    [InlineData("ädä@example.org", false)]
     [InlineData("", false)]
     [InlineData("ada", false)]
     [InlineData("ada@", false)]
