@@ -35,7 +35,8 @@ internal sealed class MailSession(MailSettings settings)
     private async Task<MailReport> Talk(SmtpClient client, MimeMessage message, CancellationToken limit)
     {
         stage = MailStage.Connecting;
-        await client.ConnectAsync(settings.Host, settings.Port, Security, limit);
+        await using var line = await ServerStream.Open(settings.Host, settings.Port, limit);
+        await client.ConnectAsync(line, settings.Host, settings.Port, Security, limit);
         if (settings.User.Length > 0)
         {
             stage = MailStage.LoggingIn;

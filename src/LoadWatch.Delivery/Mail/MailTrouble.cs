@@ -21,7 +21,9 @@ internal static class MailTrouble
         SslHandshakeException => ChannelOutcome.TryAgain(certificateFault ?? "the server and LoadWatch did not agree on TLS 1.2 or later"),
         NotSupportedException when stage == MailStage.Connecting =>
             ChannelOutcome.TryAgain("the server does not offer STARTTLS, and nothing is sent in clear text"),
-        NotSupportedException => ChannelOutcome.TryAgainSlowly("the server offers no way of logging in that LoadWatch knows"),
+        NotSupportedException when stage == MailStage.LoggingIn =>
+            ChannelOutcome.TryAgainSlowly("the server offers no way of logging in that LoadWatch knows"),
+        NotSupportedException => ChannelOutcome.TryAgainSlowly("the server cannot take a message of this kind"),
         AuthenticationException refused => ChannelOutcome.TryAgainSlowly($"the server refused user name and password: {words.Of(refused.Message)}"),
         ServiceNotAuthenticatedException => ChannelOutcome.TryAgainSlowly("the server wants a login, and none is configured"),
         SmtpCommandException refused => OfCommand(refused, stage, words),

@@ -1,6 +1,7 @@
 using System.Net;
 using System.Net.Sockets;
 using System.Security.Cryptography.X509Certificates;
+using System.Text;
 using LoadWatch.Delivery.Mail;
 using LoadWatch.Notices;
 using MimeKit;
@@ -230,6 +231,23 @@ public sealed class MailChannelTests : IDisposable
         Assert.Equal(ChannelOutcome.TryAgain("the server took longer than the time limit"), new MailChannel(settings).Deliver(Notice(), Ada));
     }
 
+    [Theory]
+    [InlineData("220 x")]
+    [InlineData("220-x\r\n")]
+    public async Task AnEndlessGreetingIsCutBeforeItFillsTheMemory(string start)
+    {
+        using var endless = new TcpListener(IPAddress.Loopback, 0);
+        endless.Start();
+        var babbling = Babble(endless, start);
+
+        var outcome = new MailChannel(Settings(((IPEndPoint)endless.LocalEndpoint).Port)).Deliver(Notice(), Ada);
+
+        Assert.Equal(ChannelResult.TryAgain, outcome.Result);
+
+        // What the two ends of a socket hold comes on top of what was read.
+        Assert.InRange(await babbling, 0, 32 << 20);
+    }
+
     [Fact]
     public void AServerThatIsNotThereIsTriedAgain()
     {
@@ -280,6 +298,25 @@ public sealed class MailChannelTests : IDisposable
     {
         certificate.Dispose();
         authority.Dispose();
+    }
+
+    /// <summary>Sends one line without an end until the other side goes.</summary>
+    private static async Task<long> Babble(TcpListener listener, string start)
+    {
+        using var client = await listener.AcceptTcpClientAsync(TestContext.Current.CancellationToken);
+        var bytes = Encoding.ASCII.GetBytes(string.Concat(Enumerable.Repeat(start.EndsWith('\n') ? start : start[^1..], 65536)));
+        await client.GetStream().WriteAsync(Encoding.ASCII.GetBytes(start), TestContext.Current.CancellationToken);
+        for (var sent = 0L; ; sent += bytes.Length)
+        {
+            try
+            {
+                await client.GetStream().WriteAsync(bytes, TestContext.Current.CancellationToken);
+            }
+            catch (IOException)
+            {
+                return sent;
+            }
+        }
     }
 
     private static Notice Notice() => new(

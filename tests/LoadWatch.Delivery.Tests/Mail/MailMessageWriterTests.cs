@@ -46,9 +46,16 @@ public sealed class MailMessageWriterTests
         var head = Encoding.ASCII.GetString(Bytes(Notice, "ada@example.org")).Split("\r\n\r\n")[0];
 
         Assert.Equal(
-            ["Auto-Submitted: auto-generated", "Content-Type: multipart/alternative; boundary=\"=_a4b37600bb3581dc9795743080bc4005\"", "Date: Sun, 01 Mar 2026 05:30:07 +0000",
-                "From: LoadWatch <brief@example.org>", "MIME-Version: 1.0", "Message-Id: <a4b37600bb3581dc9795743080bc4005@example.org>",
-                "Subject: Morning brief, Sunday 1 March 2026: all quiet", "To: ada@example.org"],
+            [
+                "Auto-Submitted: auto-generated",
+                "Content-Type: multipart/alternative; boundary=\"=_a4b37600bb3581dc9795743080bc4005\"",
+                "Date: Sun, 01 Mar 2026 05:30:07 +0000",
+                "From: LoadWatch <brief@example.org>",
+                "MIME-Version: 1.0",
+                "Message-Id: <a4b37600bb3581dc9795743080bc4005@example.org>",
+                "Subject: Morning brief, Sunday 1 March 2026: all quiet",
+                "To: ada@example.org",
+            ],
             head.Replace("\r\n\t", " ", StringComparison.Ordinal).Split("\r\n").Order(StringComparer.Ordinal));
     }
 
@@ -82,6 +89,8 @@ public sealed class MailMessageWriterTests
     [Theory]
     [InlineData("ada@example.org", true)]
     [InlineData("ada.merriweather+brief@mail.example.org", true)]
+    [InlineData("ada@bücher.example", true)]
+    [InlineData("ädä@example.org", false)]
     [InlineData("", false)]
     [InlineData("ada", false)]
     [InlineData("ada@", false)]
