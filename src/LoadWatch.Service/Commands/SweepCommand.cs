@@ -12,15 +12,20 @@ public static class SweepCommand
     public static Command Create()
     {
         var config = CommonOptions.Config();
-        var asOf = CommonOptions.Moment("--as-of", "Judge as of this moment instead of now, for rehearsals.");
+        var asOf = CommonOptions.Moment("--as-of", "Judge as of this moment instead of now, for rehearsals: no mail goes out.");
         var command = new Command("sweep", "Take in what is in the inboxes, evaluate, deliver what is due, and exit.") { config, asOf };
-        command.SetAction((parsed, cancel) => Task.FromResult(Run(parsed.GetValue(config)!, parsed.GetValue(asOf) ?? MachineClock.Now(), cancel)));
+        command.SetAction((parsed, cancel) => Task.FromResult(Run(parsed.GetValue(config)!, parsed.GetValue(asOf) ?? MachineClock.Now(), parsed.GetValue(asOf) is not null, cancel)));
         return command;
     }
 
-    private static int Run(string configPath, Instant now, CancellationToken cancel)
+    private static int Run(string configPath, Instant now, bool isRehearsal, CancellationToken cancel)
     {
         using var workplace = Workplace.OpenToWork(configPath);
+        if (isRehearsal)
+        {
+            workplace.Adopt(workplace.Configuration with { Mail = null });
+        }
+
         var report = workplace.NewSweep(now).Run(cancel);
         new StatusFile(workplace).Write(MachineClock.Now(), report, configurationFault: null);
         Print(report);

@@ -9,6 +9,7 @@ public sealed record MailEntry
     /// <summary>Name of the server; blank sends no mail.</summary>
     public string Host { get; init; } = "";
 
+    /// <summary>Port of the server.</summary>
     [Range(1, 65535)]
     public int Port { get; init; } = 587;
 

@@ -1,4 +1,5 @@
 using System.Text.Json;
+using NodaTime;
 using System.Text.Json.Serialization.Metadata;
 
 namespace LoadWatch.Service.Configuration;
@@ -15,9 +16,9 @@ public static class ValueCheck
         return fits ? null : $"{Shown(element)} is not {wanted}{Hint(element, type)}";
     }
 
-    /// <summary>The words of an enumeration as the configuration writes them; <c>None</c> stands for no value and is no word.</summary>
+    /// <summary>The words of an enumeration as the configuration writes them; no day is no weekday.</summary>
     public static IReadOnlyList<string> WordsOf(Type enumeration) =>
-        [.. Enum.GetNames(enumeration).Where(name => name != "None").Select(JsonNamingPolicy.SnakeCaseLower.ConvertName)];
+        [.. Enum.GetNames(enumeration).Where(name => enumeration != typeof(IsoDayOfWeek) || name != nameof(IsoDayOfWeek.None)).Select(JsonNamingPolicy.SnakeCaseLower.ConvertName)];
 
     private static (bool Fits, string Wanted) Judge(JsonElement element, JsonTypeInfo type) => type switch
     {

@@ -14,6 +14,7 @@ namespace LoadWatch.Service.Pipeline;
 public sealed class Recovery(Store store, Archive archive, ArchiveReader reader, Settlement settlement, IDecodeProbe probe)
 {
     private const int MostAttempts = 3;
+    private const int ProbedTogether = 64;
 
     /// <summary>Whether a waiting arrival has ended a child before: then nothing waits for it (I-14).</summary>
     public static bool IsSuspect(Arrival arrival) => arrival.Attempts > 0;
@@ -23,25 +24,42 @@ public sealed class Recovery(Store store, Archive archive, ArchiveReader reader,
 
     public void Run(CancellationToken cancel)
     {
-        foreach (var arrival in store.Read(session => session.Arrivals.Waiting()))
+        foreach (var group in store.Read(session => session.Arrivals.Waiting()).Chunk(ProbedTogether))
         {
             cancel.ThrowIfCancellationRequested();
-            TakeUp(arrival);
+            TakeUp(group);
         }
     }
 
-    private void TakeUp(Arrival arrival)
+    /// <summary>One child for the whole group is enough where it lives; only where it dies is each tried alone.</summary>
+    private void TakeUp(Arrival[] group)
     {
-        if (!archive.Verify(arrival.ObjectSha))
+        var whole = group.Where(IsWhole).ToList();
+        var unsuspected = whole.FindAll(arrival => !IsSuspect(arrival));
+        var livedThrough = unsuspected.Count > 1 && Survives(unsuspected) ? unsuspected : [];
+        livedThrough.ForEach(Settle);
+        whole.Except(livedThrough).ToList().ForEach(TakeUp);
+    }
+
+    private bool IsWhole(Arrival arrival)
+    {
+        var isWhole = archive.Verify(arrival.ObjectSha);
+        if (!isWhole)
         {
             Refuse(arrival, "its original in the archive is missing or damaged");
         }
-        else if (probe.Survives(archive.PathOf(arrival.ObjectSha), arrival.Size))
+
+        return isWhole;
+    }
+
+    private bool Survives(List<Arrival> arrivals) =>
+        probe.Survives(arrivals.ConvertAll(arrival => archive.PathOf(arrival.ObjectSha)), arrivals.Sum(arrival => arrival.Size));
+
+    private void TakeUp(Arrival arrival)
+    {
+        if (Survives([arrival]))
         {
-            foreach (var piece in reader.Sighted(arrival.ObjectSha).InPieces())
-            {
-                settlement.Settle(piece, force: false);
-            }
+            Settle(arrival);
         }
         else
         {
@@ -53,6 +71,14 @@ public sealed class Recovery(Store store, Archive archive, ArchiveReader reader,
         }
     }
 
+    private void Settle(Arrival arrival)
+    {
+        foreach (var piece in reader.Sighted(arrival.ObjectSha).InPieces())
+        {
+            settlement.Settle(piece, force: false);
+        }
+    }
+
     private void Refuse(Arrival arrival, string reason) =>
         store.Write(session => session.Arrivals.Settle(arrival.Sha, ArrivalState.Refused, "unknown", reason, null));
 }
@@ -60,18 +86,18 @@ public sealed class Recovery(Store store, Archive archive, ArchiveReader reader,
 /// <summary>Tries whether decoding a file ends the process that does it.</summary>
 public interface IDecodeProbe
 {
-    /// <param name="path">An object of the archive.</param>
-    /// <param name="bytes">Its size.</param>
-    bool Survives(string path, long bytes);
+    /// <param name="paths">Objects of the archive.</param>
+    /// <param name="bytes">Their size together.</param>
+    bool Survives(IReadOnlyList<string> paths, long bytes);
 }
 
 /// <summary>Runs <c>loadwatch inspect</c> on the file in a child process with a limit of time and memory.</summary>
 /// <param name="configPath">The configuration whose CSV layouts count.</param>
 public sealed class ChildProcessProbe(string configPath) : IDecodeProbe
 {
-    public bool Survives(string path, long bytes)
+    public bool Survives(IReadOnlyList<string> paths, long bytes)
     {
-        using var child = Process.Start(StartInfo(path, bytes))!;
+        using var child = Process.Start(StartInfo(paths, bytes))!;
         child.OutputDataReceived += (_, _) => { };
         child.ErrorDataReceived += (_, _) => { };
         child.BeginOutputReadLine();
@@ -87,7 +113,7 @@ public sealed class ChildProcessProbe(string configPath) : IDecodeProbe
         return false;
     }
 
-    private ProcessStartInfo StartInfo(string path, long bytes)
+    private ProcessStartInfo StartInfo(IReadOnlyList<string> paths, long bytes)
     {
         var program = Environment.ProcessPath ?? throw new InvalidOperationException("the path of this process is not known");
         var start = new ProcessStartInfo(program) { UseShellExecute = false, RedirectStandardOutput = true, RedirectStandardError = true };
@@ -96,7 +122,7 @@ public sealed class ChildProcessProbe(string configPath) : IDecodeProbe
             start.ArgumentList.Add(typeof(ChildProcessProbe).Assembly.Location);
         }
 
-        foreach (var word in new[] { "inspect", "--json", "--config", configPath, path })
+        foreach (var word in new[] { "inspect", "--json", "--config", configPath }.Concat(paths))
         {
             start.ArgumentList.Add(word);
         }

@@ -9,6 +9,7 @@ public sealed class ExitCodeTests
         0 Ok
         64 Usage
         65 Data
+        69 Unavailable
         70 Software
         73 CannotCreate
         74 InputOutput

@@ -25,6 +25,10 @@ public sealed class PoisonTests : IDisposable
         Assert.Equal([ArrivalState.Waiting, ArrivalState.Waiting], folder.Arrivals().Select(arrival => arrival.State));
         var probe = new DyingProbe(WorkingFolder.Sha(poison), deaths: int.MaxValue);
         folder.Sweep(probe: probe);
+        Assert.Equal((ArrivalState.Waiting, 1, 1), (folder.Arrival(poison)!.State, folder.Arrival(poison)!.Attempts, probe.Deaths));
+        Assert.True(File.Exists(Path.Combine(folder.Root, "pages", "staff.html")), "a suspect keeps nobody from the brief");
+        folder.Sweep(probe: probe);
+        folder.Sweep(probe: probe);
         var refused = folder.Arrival(poison)!;
         Assert.Equal((ArrivalState.Refused, 3, 3), (refused.State, refused.Attempts, probe.Deaths));
         Assert.StartsWith("poisonous", refused.Reason);
@@ -37,14 +41,20 @@ public sealed class PoisonTests : IDisposable
     [Fact]
     public void AChildThatSurvivesTheThirdTimeStoresTheArrival()
     {
-        folder.Sweep(probe: new DyingProbe(WorkingFolder.Sha(poison), deaths: 2));
+        var probe = new DyingProbe(WorkingFolder.Sha(poison), deaths: 2);
+        folder.Sweep(probe: probe);
+        folder.Sweep(probe: probe);
+        folder.Sweep(probe: probe);
         Assert.Equal((ArrivalState.Stored, 2), (folder.Arrival(poison)!.State, folder.Arrival(poison)!.Attempts));
     }
 
     [Fact]
     public void ARebuildLeavesAPoisonousArrivalAlone()
     {
-        folder.Sweep(probe: new DyingProbe(WorkingFolder.Sha(poison), deaths: int.MaxValue));
+        var probe = new DyingProbe(WorkingFolder.Sha(poison), deaths: int.MaxValue);
+        folder.Sweep(probe: probe);
+        folder.Sweep(probe: probe);
+        folder.Sweep(probe: probe);
         var before = folder.Export();
         folder.Rebuild();
         Assert.Equal(before, folder.Export());
@@ -59,15 +69,15 @@ public sealed class PoisonTests : IDisposable
         Assert.Equal(2, folder.Arrivals().Count);
     }
 
-    /// <summary>Says of one object that the child died of it, so many times.</summary>
+    /// <summary>Says of one object that the child died of it, so many times when it was tried alone.</summary>
     private sealed class DyingProbe(string sha, int deaths) : IDecodeProbe
     {
         public int Deaths { get; private set; }
 
-        public bool Survives(string path, long bytes)
+        public bool Survives(IReadOnlyList<string> paths, long bytes)
         {
-            var dies = Path.GetFileName(path) == sha && Deaths < deaths;
-            Deaths += dies ? 1 : 0;
+            var dies = paths.Any(path => Path.GetFileName(path) == sha) && Deaths < deaths;
+            Deaths += dies && paths.Count == 1 ? 1 : 0;
             return !dies;
         }
     }

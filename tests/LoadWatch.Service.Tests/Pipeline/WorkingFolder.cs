@@ -174,6 +174,7 @@ internal sealed class WorkingFolder : IDisposable
 
     private sealed class NoProbe : IDecodeProbe
     {
-        public bool Survives(string path, long bytes) => throw new InvalidOperationException($"nothing was waiting, yet {path} is probed");
+        public bool Survives(IReadOnlyList<string> paths, long bytes) =>
+            throw new InvalidOperationException($"nothing was waiting, yet {paths[0]} is probed");
     }
 }

@@ -108,7 +108,7 @@ public sealed class ArchiveTests : IDisposable
     [Fact]
     public void ASourceThatFailsLeavesNothing()
     {
-        Assert.Throws<IOException>(() => archive.Stage(new FailingStream(), 1000, TestContext.Current.CancellationToken));
+        Assert.Throws<SourceUnreadableException>(() => archive.Stage(new FailingStream(), 1000, TestContext.Current.CancellationToken));
 
         Assert.Empty(Directory.GetFiles(folder.IncomingPath));
     }
