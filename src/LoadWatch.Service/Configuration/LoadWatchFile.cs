@@ -41,6 +41,9 @@ public sealed record LoadWatchFile
     /// <summary>Who is told.</summary>
     public IReadOnlyList<ContactEntry> Contacts { get; init; } = [new ContactEntry()];
 
+    /// <summary>The server that takes mail.</summary>
+    public MailEntry Mail { get; init; } = new();
+
     /// <summary>CSV layouts beside the built-in one; the header picks the layout.</summary>
     public IReadOnlyList<CsvLayout> Layouts { get; init; } = [];
 
@@ -52,9 +55,6 @@ public sealed record LoadWatchFile
 
     /// <summary>How the service looks for files.</summary>
     public IntakeEntry Intake { get; init; } = new();
-
-    /// <summary>The server that takes mail.</summary>
-    public MailEntry Mail { get; init; } = new();
 }
 
 /// <summary>One watched folder.</summary>

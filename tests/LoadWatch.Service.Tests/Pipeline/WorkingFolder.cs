@@ -103,7 +103,7 @@ internal sealed class WorkingFolder : IDisposable
     /// <summary>One sweep in this process; a probe is only asked where an earlier process died.</summary>
     public SweepReport Sweep(Instant? now = null, IDecodeProbe? probe = null) => Work(now, probe, sweep => sweep.Run());
 
-    public SweepReport Rebuild() => Work(null, null, sweep => sweep.Rebuild(CancellationToken.None));
+    public SweepReport Rebuild(Instant? now = null) => Work(now, null, sweep => sweep.Rebuild(CancellationToken.None));
 
     /// <summary>All five tables as text.</summary>
     public string Export() => string.Join('\n', Exporter.Tables.Select(table => $"{table}\n{Export(table)}"));
