@@ -139,4 +139,21 @@ public class FitFieldTests
         (file[^2], file[^1]) = ((byte)(crc & 0xFF), (byte)(crc >> 8));
         return file;
     }
+
+    /// <summary>Sums and differences of such numbers would overflow, and one file would stop a whole night.</summary>
+    [Fact]
+    public void RealNumbersBeyondAnyReadingAreNone()
+    {
+        var part = Parts.Begin()
+            .Define(0, new(20, new(253, Unsigned32), new(3, Unsigned8), new(5, Real64)))
+            .Message(0, Parts.Base, 120, 1.7e308)
+            .Message(0, Parts.Base + 1, 121, -1.7e308);
+
+        var recording = Assert.Single(part.Decode().Recordings);
+        var person = new LoadWatch.People.Person("p", "P", "g", 1990, null, NodaTime.DateTimeZone.Utc);
+        var values = LoadWatch.Activities.ActivityComputation.Compute(recording, person, LoadWatch.People.AnchorBook.Empty, new());
+
+        Assert.False(recording.Samples.Has(Channel.Distance));
+        Assert.DoesNotContain(values.Quantities, quantity => quantity.Name == "distance");
+    }
 }
