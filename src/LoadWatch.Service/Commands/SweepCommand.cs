@@ -1,5 +1,6 @@
 using System.CommandLine;
 using LoadWatch.Recordings;
+using LoadWatch.Service.Export;
 using LoadWatch.Service.Health;
 using LoadWatch.Service.Pipeline;
 using NodaTime;
@@ -49,13 +50,12 @@ public static class SweepCommand
         }
     }
 
-    /// <summary>One line that counts each state; members of archives are arrivals of their own.</summary>
+    /// <summary>One line that counts each state, with what this sweep added; members of archives are arrivals of their own.</summary>
     public static string Counts(SweepReport report)
     {
         var states = Enum.GetValues<ArrivalState>()
-            .Where(state => state != ArrivalState.Waiting)
-            .Select(state => $"{report.CountOf(state)} {state.ToString().ToLowerInvariant()}");
-        return $"{report.Seen} files in the inboxes, {report.Settling} still settling. New arrivals: {string.Join(", ", states)}. "
+            .Select(state => $"{report.InAll.GetValueOrDefault(state)} {Words.Of(state)}{(report.CountOf(state) is > 0 and var added ? $" (+{added})" : "")}");
+        return $"{report.Seen} files in the inboxes, {report.Settling} still settling. Arrivals in all: {string.Join(", ", states)}. "
             + $"{report.AlertChanges} alert changes, {report.NoticesDecided} briefs decided.";
     }
 }

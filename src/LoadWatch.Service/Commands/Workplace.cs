@@ -10,6 +10,7 @@ public sealed class Workplace : IDisposable
 {
     private readonly string configPath;
     private readonly InstanceLock? instance;
+    private Sweep? last;
 
     private Workplace(string configPath, WorkingConfiguration configuration, DataFolder folder, InstanceLock? instance, Store store)
     {
@@ -56,7 +57,13 @@ public sealed class Workplace : IDisposable
     /// <summary>Takes over a new configuration; its data folder stays the one that is open.</summary>
     public WorkingConfiguration Adopt(WorkingConfiguration configuration) => Configuration = configuration;
 
-    public Sweep NewSweep(Instant now) => new(Configuration, Folder, Store, now, new ChildProcessProbe(configPath));
+    /// <summary>The next sweep. After one that did not get as far as the pages, also in an earlier process, it writes them all anew.</summary>
+    public Sweep NewSweep(Instant now)
+    {
+        var sweep = new Sweep(Configuration, Folder, Store, now, new ChildProcessProbe(configPath)) { PagesAreCurrent = last is { PagesAreWritten: true } };
+        last = sweep;
+        return sweep;
+    }
 
     public void Dispose()
     {

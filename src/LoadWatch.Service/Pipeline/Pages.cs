@@ -10,13 +10,13 @@ namespace LoadWatch.Service.Pipeline;
 /// <summary>Every contact's page as of now: "not in yet" becomes "in" without waiting for the next brief.</summary>
 public sealed class Pages(WorkingConfiguration configuration, Store store, Briefs briefs, SweepReport report)
 {
-    /// <summary>Each page whose content may have changed: there is news, a new day began for its reader, or it is not there.</summary>
-    public void Rewrite(Instant now)
+    /// <summary>All pages, or those for whose reader a new day began and those that are not there.</summary>
+    public void Rewrite(Instant now, bool all)
     {
         foreach (var contact in configuration.Contacts)
         {
             var path = Path.Combine(configuration.PagesFolder, $"{contact.Id}.html");
-            if (report.HasNews || !IsOfToday(path, contact, now))
+            if (all || !IsOfToday(path, contact, now))
             {
                 Rewrite(contact, path);
             }

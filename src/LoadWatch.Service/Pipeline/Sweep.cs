@@ -40,6 +40,11 @@ public sealed class Sweep
 
     public SweepReport Report { get; } = new();
 
+    /// <summary>Whether the pages tell all that was known before this sweep; only then may it leave those alone that it has no news for.</summary>
+    public bool PagesAreCurrent { get; init; }
+
+    public bool PagesAreWritten { get; private set; }
+
     public SweepReport Run(CancellationToken cancel = default)
     {
         AdoptConfiguration(cancel);
@@ -49,6 +54,7 @@ public sealed class Sweep
         intake.TakeIn(Inboxes.Changed(configuration, store, Report), cancel);
         moved.TakeUp();
         Evaluate(cancel);
+        Report.InAll = store.Read(session => session.Arrivals.CountByState());
         return Report;
     }
 
@@ -131,6 +137,7 @@ public sealed class Sweep
         store.Write(new Evaluation(configuration, briefs, now, Report).Run);
         KillPoint.Pass("evaluated");
         new Deliveries(store, Deliveries.Channels(configuration), Report).Run(now);
-        new Pages(configuration, store, briefs, Report).Rewrite(now);
+        new Pages(configuration, store, briefs, Report).Rewrite(now, all: !PagesAreCurrent || Report.HasNews);
+        PagesAreWritten = true;
     }
 }

@@ -24,6 +24,9 @@ public sealed class SweepReport
     /// <summary>Arrivals settled by this sweep, by state; members of archives count on their own.</summary>
     public SortedDictionary<ArrivalState, int> Settled { get; } = [];
 
+    /// <summary>All arrivals after the sweep, by state.</summary>
+    public IReadOnlyDictionary<ArrivalState, int> InAll { get; set; } = new Dictionary<ArrivalState, int>();
+
     /// <summary>People whose days were computed.</summary>
     public int PeopleComputed { get; set; }
 

@@ -54,7 +54,7 @@ public sealed class ExitCodeTests : IDisposable
         folder.Put("nobody.fit", Some.Fit(Some.Yesterday));
         var ended = Loadwatch.Run("sweep", "--config", folder.ConfigPath, "--as-of", WorkingFolder.NowText);
         Assert.Equal((0, ""), (ended.Code, ended.Errors));
-        Assert.StartsWith("3 files in the inboxes, 0 still settling. New arrivals: 0 stored, 0 aside, 1 held, 2 refused.", ended.Output, StringComparison.Ordinal);
+        Assert.StartsWith("3 files in the inboxes, 0 still settling. Arrivals in all: 0 waiting, 0 stored, 0 aside, 1 held (+1), 2 refused (+2).", ended.Output, StringComparison.Ordinal);
         Assert.Contains(Path.Combine(folder.Root, "pages", "staff.html"), ended.Output, StringComparison.Ordinal);
     }
 
