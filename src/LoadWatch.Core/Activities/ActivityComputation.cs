@@ -10,6 +10,9 @@ namespace LoadWatch.Activities;
 /// <summary>From one recording to everything that it says: quality cuts, histograms, loads, times in zone, stimulus. Pure.</summary>
 public static class ActivityComputation
 {
+    /// <summary>Raised by one whenever a formula, a cut or a quantity changes: what an older program computed is then computed again.</summary>
+    public const int Version = 2;
+
     /// <summary>Anchors are taken as they hold on the recording's local date.</summary>
     /// <exception cref="ArgumentException">The recording carries no date.</exception>
     public static ActivityValues Compute(Recording recording, Person person, AnchorBook anchors, ComputationSettings settings)

@@ -16,37 +16,13 @@ public sealed record ActivityLoads(
 {
     public static ActivityLoads Of(UsableRecording usable, LocalDate date, Person person, AnchorBook anchors, ComputationSettings settings)
     {
-        var (quantities, remarks) = HeartRateQuantities(usable, date, person, anchors);
-        quantities.AddRange(ExternalLoads.Of(usable));
+        var (ofHeartRate, remarks) = HeartRateLoads.Of(usable, date, person, anchors);
         var (ofSets, remark) = SetTotals.Of(usable.Recording.Sets);
-        quantities.AddRange(ofSets);
+        IEnumerable<Quantity> quantities = [.. ofHeartRate, .. ExternalLoads.Of(usable), .. SpeedLoads.Of(usable, settings.SpeedBounds), .. ofSets];
         return new ActivityLoads(
             [.. quantities.OrderBy(quantity => quantity.Name, StringComparer.Ordinal)],
             [.. Zones(usable, date, person, anchors, settings)],
             remark is null ? remarks : [.. remarks, remark]);
-    }
-
-    private static (List<Quantity> Quantities, List<string> Remarks) HeartRateQuantities(
-        UsableRecording usable, LocalDate date, Person person, AnchorBook anchors)
-    {
-        List<Quantity> quantities = [];
-        if (!usable.Histograms.TryGetValue(Channel.HeartRate, out var heartRate))
-        {
-            return (quantities, []);
-        }
-
-        var (reserve, missing) = HeartRateReserve.On(date, person, anchors);
-        if (reserve is not null && BanisterTrimp.Of(heartRate, reserve, person.Sex) is { } impulse)
-        {
-            quantities.Add(new Quantity(QuantityNames.BanisterTrimp, impulse, "AU", reserve.Estimated || person.Sex is null));
-        }
-
-        if (HeartRateMaximum.On(date, person, anchors) is { Bpm: > 0 } max && EdwardsLoad.Of(heartRate, max.Bpm) is { } load)
-        {
-            quantities.Add(new Quantity(QuantityNames.EdwardsLoad, load, "AU", max.Estimated));
-        }
-
-        return (quantities, missing is null ? [] : [missing]);
     }
 
     private static IEnumerable<TimeInZone> Zones(

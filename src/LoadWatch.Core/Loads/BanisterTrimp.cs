@@ -29,6 +29,12 @@ public static class BanisterTrimp
     public static double? Of(Histogram heartRate, HeartRateReserve reserve, Sex? sex)
     {
         var (a, b) = Pair(sex);
+        return Of(heartRate, reserve, a, b);
+    }
+
+    /// <summary>The same with a pair of one's own.</summary>
+    internal static double? Of(Histogram heartRate, HeartRateReserve reserve, double a, double b)
+    {
         double? load = null;
         foreach (var (bpm, milliseconds) in heartRate.Bins)
         {

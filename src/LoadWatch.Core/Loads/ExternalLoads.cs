@@ -3,7 +3,7 @@ using LoadWatch.Recordings;
 
 namespace LoadWatch.Loads;
 
-/// <summary>What was done, whatever it cost the body: minutes, distance, mechanical work. Sums and totals, no published source
+/// <summary>What was done, whatever it cost the body: minutes, distance, climb, mechanical work. Sums and totals, no published source
 /// needed.</summary>
 public static class ExternalLoads
 {
@@ -18,6 +18,11 @@ public static class ExternalLoads
         if (DistanceMetres(usable) is { } metres)
         {
             yield return new Quantity(QuantityNames.Distance, metres, "m", Estimated: false);
+        }
+
+        if (usable[Channel.Altitude] is { } altitude)
+        {
+            yield return new Quantity(QuantityNames.Climb, Climb.Metres(altitude), "m", Estimated: false);
         }
 
         if (usable[Channel.Power] is { } power)

@@ -15,11 +15,26 @@ public static class QuantityNames
     /// <summary>Edwards' summated-zone load, arbitrary units (AU).</summary>
     public const string EdwardsLoad = "edwards_load";
 
+    /// <summary>Lucia's three-zone load by the ventilatory thresholds, arbitrary units (AU).</summary>
+    public const string LuciaLoad = "lucia_load";
+
+    /// <summary>Stagno's load of team sports, arbitrary units (AU).</summary>
+    public const string StagnoLoad = "stagno_load";
+
+    /// <summary>Training impulse with a person's own weighting (Manzi), arbitrary units (AU).</summary>
+    public const string IndividualTrimp = "individual_trimp";
+
     /// <summary>Timer time, else elapsed time, minutes (min).</summary>
     public const string Minutes = "minutes";
 
     /// <summary>Distance, metres (m).</summary>
     public const string Distance = "distance";
+
+    /// <summary>Sum of the rises of altitude, metres (m).</summary>
+    public const string Climb = "climb";
+
+    /// <summary>Highest speed held for 1 s, metres per second (m/s). No load: a day's sum of it would mean nothing.</summary>
+    public const string SpeedTop = "speed_top";
 
     /// <summary>Mechanical work, kilojoules (kJ).</summary>
     public const string Work = "work";
@@ -33,6 +48,11 @@ public static class QuantityNames
     /// <summary>Kilograms times repetitions over all working sets, kilograms (kg).</summary>
     public const string Kilograms = "kilograms";
 
-    /// <summary>Every quantity that a group's load may be.</summary>
-    public static IReadOnlyList<string> All { get; } = [BanisterTrimp, EdwardsLoad, Minutes, Distance, Work, Sets, Repetitions, Kilograms];
+    /// <summary>Every quantity that a group's load may be, whatever the bounds of the speed zones.</summary>
+    public static IReadOnlyList<string> All { get; } =
+        [BanisterTrimp, EdwardsLoad, LuciaLoad, StagnoLoad, IndividualTrimp, Minutes, Distance, Climb, Work, Sets, Repetitions, Kilograms];
+
+    /// <summary>The same and the distances above those bounds that are fast (<see cref="DistanceAbove"/>).</summary>
+    public static IReadOnlyList<string> AllWith(IReadOnlyList<double> speedBounds) =>
+        [.. All, .. DistanceAbove.Bounds(speedBounds).Select(DistanceAbove.Name)];
 }

@@ -17,12 +17,9 @@ public static class ZoneTimes
     public static TimeInZone? OfHeartRate(
         Histogram heartRate, LocalDate date, Person person, AnchorBook anchors, IReadOnlyList<double> reserveBounds)
     {
-        var lower = anchors.On(date, person.Id, AnchorKind.HeartRateVt1);
-        var upper = anchors.On(date, person.Id, AnchorKind.HeartRateVt2);
-        if (lower is not null && upper is not null && lower.Value < upper.Value)
+        if (HeartRateThresholds.On(date, person, anchors) is { } thresholds)
         {
-            var estimated = lower.Source == AnchorSource.Estimated || upper.Source == AnchorSource.Estimated;
-            return Of(Channel.HeartRate, "ventilatory thresholds", heartRate, [lower.Value, upper.Value], estimated);
+            return Of(Channel.HeartRate, "ventilatory thresholds", heartRate, [thresholds.FirstBpm, thresholds.SecondBpm], thresholds.Estimated);
         }
 
         return HeartRateReserve.On(date, person, anchors).Reserve is { } reserve

@@ -8,9 +8,11 @@ public static class LoadUnits
     /// <summary>The unit of a built-in quantity; for any other its name in words.</summary>
     public static string Of(string quantity) => quantity switch
     {
-        QuantityNames.BanisterTrimp or QuantityNames.EdwardsLoad => "AU",
+        QuantityNames.BanisterTrimp or QuantityNames.EdwardsLoad or QuantityNames.LuciaLoad or QuantityNames.StagnoLoad
+            or QuantityNames.IndividualTrimp => "AU",
         QuantityNames.Minutes => "min",
-        QuantityNames.Distance => "m",
+        QuantityNames.Distance or QuantityNames.Climb => "m",
+        _ when quantity.StartsWith(DistanceAbove.Prefix, StringComparison.Ordinal) => "m",
         QuantityNames.Work => "kJ",
         QuantityNames.Kilograms => "kg",
         _ => OneLine.Of(quantity.Replace('_', ' ')),

@@ -9,6 +9,12 @@ public enum AnchorKind
     HeartRateMax,
     HeartRateVt1,
     HeartRateVt2,
+
+    /// <summary>The factor a of a person's own training impulse.</summary>
+    TrimpWeight,
+
+    /// <summary>The exponent b of a person's own training impulse.</summary>
+    TrimpExponent,
     CriticalPower,
     WPrime,
     PowerMax,

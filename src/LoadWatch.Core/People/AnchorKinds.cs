@@ -9,6 +9,8 @@ public static class AnchorKinds
         new(AnchorKind.HeartRateMax, "heart_rate_max", "bpm", 80, 240),
         new(AnchorKind.HeartRateVt1, "heart_rate_vt1", "bpm", 60, 230),
         new(AnchorKind.HeartRateVt2, "heart_rate_vt2", "bpm", 60, 235),
+        new(AnchorKind.TrimpWeight, "trimp_weight", "1", 0.01, 5),
+        new(AnchorKind.TrimpExponent, "trimp_exponent", "1", 0.1, 8),
         new(AnchorKind.CriticalPower, "critical_power", "W", 20, 600),
         new(AnchorKind.WPrime, "w_prime", "J", 1000, 60000),
         new(AnchorKind.PowerMax, "power_max", "W", 50, 3000),
@@ -26,7 +28,7 @@ public static class AnchorKinds
 }
 
 /// <param name="Name">As written in <c>anchors.csv</c>.</param>
-/// <param name="Unit">The only unit taken.</param>
+/// <param name="Unit">The only unit taken; <c>1</c> for a pure number.</param>
 /// <param name="Lowest">Smallest value taken, inclusive.</param>
 /// <param name="Highest">Largest value taken, inclusive.</param>
 public sealed record AnchorKindInfo(AnchorKind Kind, string Name, string Unit, double Lowest, double Highest);

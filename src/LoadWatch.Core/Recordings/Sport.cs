@@ -8,6 +8,10 @@ public sealed record Sport(string Name, string? Detail = null)
     /// <summary>On foot, power is a watch's model of speed and slope: a critical power from a bicycle or an ergometer does not belong to it.</summary>
     public bool IsOnFoot => Name is "running" or "walking" or "hiking";
 
+    /// <summary>A game of two teams in which players run or skate.</summary>
+    public bool IsTeamSport => Name is "team_sport" or "soccer" or "american_football" or "rugby" or "hockey" or "lacrosse" or "basketball"
+        or "volleyball" or "baseball" or "cricket";
+
     /// <summary><c>name</c> or <c>name/detail</c>.</summary>
     public override string ToString() => Detail is null ? Name : $"{Name}/{Detail}";
 

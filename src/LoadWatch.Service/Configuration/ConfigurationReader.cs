@@ -120,7 +120,7 @@ public sealed class ConfigurationReader
         var groups = new Dictionary<string, Group>(StringComparer.Ordinal);
         foreach (var (entry, i) in file.Groups.Select((entry, i) => (entry, i)))
         {
-            faults.CheckWords([entry.LoadQuantity], QuantityNames.All, $"$.groups[{i}].load_quantity", "a quantity");
+            faults.CheckWords([entry.LoadQuantity], QuantityNames.AllWith(file.Computation.SpeedBounds), $"$.groups[{i}].load_quantity", "a quantity");
             if (entry.Limits is not null)
             {
                 CheckLimits(limits[i], $"$.groups[{i}].limits");

@@ -89,7 +89,8 @@ public sealed record GroupEntry
     public string Name { get; init; } = "";
 
     /// <summary>
-    /// The quantity that is this group's load: banister_trimp, edwards_load, minutes, distance, work, sets, repetitions or kilograms.
+    /// The quantity that is this group's load: banister_trimp, edwards_load, lucia_load, stagno_load, individual_trimp, minutes, distance,
+    /// distance_above_5_5_m_s, distance_above_7_m_s (of the speed bounds from 5.5 on), climb, work, sets, repetitions or kilograms.
     /// </summary>
     public string LoadQuantity { get; init; } = "banister_trimp";
 

@@ -1,3 +1,4 @@
+using LoadWatch.Activities;
 using LoadWatch.Decoding;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
@@ -76,7 +77,7 @@ public sealed class Sweep
         }
 
         new DayUpdate(configuration, store, now, Report) { Through = through }.Run(cancel);
-        store.Write(session => session.Derived.SetConfigHash(configuration.Hash));
+        store.Write(session => session.Derived.SetConfigHash(Basis));
         return Report;
     }
 
@@ -111,7 +112,10 @@ public sealed class Sweep
         whenDone();
     }
 
-    /// <summary>What was computed under another configuration is computed again: anchors, owners and limits may differ.</summary>
+    /// <summary>The configuration and the formulas by which derived rows are computed.</summary>
+    private string Basis => $"{configuration.Hash}/{ActivityComputation.Version}";
+
+    /// <summary>What was computed on another basis is computed again: anchors, owners, limits or formulas may differ.</summary>
     private void AdoptConfiguration(CancellationToken cancel)
     {
         var derivedUnder = store.Write(session =>
@@ -119,7 +123,7 @@ public sealed class Sweep
             session.Configurations.Remember(configuration.Hash, configuration.Text);
             return session.Derived.ConfigHash();
         });
-        if (derivedUnder != configuration.Hash)
+        if (derivedUnder != Basis)
         {
             Rebuild(cancel);
         }

@@ -10,8 +10,8 @@ public class ActivityComputationTests
     private static readonly AnchorBook Book = Given.Anchors(
         [.. Given.Cyclist, Given.Anchor(AnchorKind.HeartRateRest, 50), Given.Anchor(AnchorKind.HeartRateMax, 190)]);
 
-    /// <summary>By hand: 60 minutes at 150 bpm, rest 50, maximum 190 is 108.0954 (Banister 1991); 150 of 190 bpm is 79 %, weight 3; 200 W
-    /// for an hour is 720 kJ.</summary>
+    /// <summary>By hand: 60 minutes at 150 bpm, rest 50, maximum 190 is 108.0954 (Banister 1991); 150 of 190 bpm is 79 %, weight 3
+    /// (Edwards 1993) and 1.71 (Stagno 2007, from memory); 200 W for an hour is 720 kJ.</summary>
     [Fact]
     public void ARideGivesEveryQuantityThatItHolds()
     {
@@ -24,10 +24,10 @@ public class ActivityComputationTests
         var values = Compute(recording);
 
         Assert.Equal(
-            [("banister_trimp", "AU"), ("distance", "m"), ("edwards_load", "AU"), ("minutes", "min"), ("work", "kJ")],
+            [("banister_trimp", "AU"), ("distance", "m"), ("edwards_load", "AU"), ("minutes", "min"), ("stagno_load", "AU"), ("work", "kJ")],
             values.Quantities.Select(quantity => (quantity.Name, quantity.Unit)));
         Assert.Equal(108.0954, values.Quantities[0].Value, 1e-4);
-        Assert.Equal([30_600.0, 180, 60, 720], values.Quantities.Skip(1).Select(quantity => quantity.Value));
+        Assert.Equal([30_600.0, 180, 60, 102.6, 720], values.Quantities.Skip(1).Select(quantity => quantity.Value));
         Assert.DoesNotContain(values.Quantities, quantity => quantity.Estimated);
         Assert.Equal((150.0, 150, 200.0, 200.0), (values.HeartRateMeanBpm, values.HeartRateMaxBpm, values.PowerMeanWatts, values.PowerMaxWatts));
         Assert.Equal([Channel.HeartRate, Channel.Power], values.TimesInZone.Select(zone => zone.Channel));
@@ -70,7 +70,7 @@ public class ActivityComputationTests
 
         var values = ActivityComputation.Compute(recording, Given.Person(sex: null), Book, new ComputationSettings());
 
-        Assert.Equal([("banister_trimp", true), ("edwards_load", false)], values.Quantities.Select(quantity => (quantity.Name, quantity.Estimated)));
+        Assert.Equal([("banister_trimp", true), ("edwards_load", false), ("stagno_load", false)], values.Quantities.Select(quantity => (quantity.Name, quantity.Estimated)));
     }
 
     [Fact]
@@ -81,8 +81,44 @@ public class ActivityComputationTests
         var values = ActivityComputation.Compute(
             recording, Given.Person(), Given.Anchors(Given.Anchor(AnchorKind.HeartRateMax, 190)), new ComputationSettings());
 
-        Assert.Equal("edwards_load", Assert.Single(values.Quantities).Name);
+        Assert.Equal(["edwards_load", "stagno_load"], values.Quantities.Select(quantity => quantity.Name));
         Assert.Equal("no heart_rate_rest: no load by heart-rate reserve", Assert.Single(values.Remarks));
+    }
+
+    /// <summary>By hand: 30 minutes at 150 bpm lie between the thresholds, 2 x 30 (Lucia 2003); x = 100 / 140, a = 0.2, b = 4 give
+    /// 30 x 0.7142857 x 0.2 x exp(2.8571429) = 74.6216 (Manzi 2009).</summary>
+    [Fact]
+    public void ThresholdsAndAnOwnPairAddTheLoadsThatNeedThem()
+    {
+        var book = Given.Anchors(
+            Given.Anchor(AnchorKind.HeartRateRest, 50),
+            Given.Anchor(AnchorKind.HeartRateMax, 190),
+            Given.Anchor(AnchorKind.HeartRateVt1, 140),
+            Given.Anchor(AnchorKind.HeartRateVt2, 170, source: AnchorSource.Estimated),
+            Given.Anchor(AnchorKind.TrimpWeight, 0.2),
+            Given.Anchor(AnchorKind.TrimpExponent, 4, source: AnchorSource.Estimated));
+        var recording = Given.Recording("cycling", Given.EverySecond((Channel.HeartRate, Given.Steps((150, 1800)))));
+
+        var values = ActivityComputation.Compute(recording, Given.Person(), book, new ComputationSettings());
+
+        Assert.Equal(
+            [("banister_trimp", false), ("edwards_load", false), ("individual_trimp", true), ("lucia_load", true), ("stagno_load", false)],
+            values.Quantities.Select(quantity => (quantity.Name, quantity.Estimated)));
+        Assert.Equal(74.6216, values.Quantities[2].Value, 1e-4);
+        Assert.Equal(60, values.Quantities[3].Value);
+    }
+
+    [Fact]
+    public void HalfAPairIsNamed()
+    {
+        var book = Given.Anchors(
+            Given.Anchor(AnchorKind.HeartRateRest, 50), Given.Anchor(AnchorKind.HeartRateMax, 190), Given.Anchor(AnchorKind.TrimpWeight, 0.2));
+        var recording = Given.Recording("cycling", Given.EverySecond((Channel.HeartRate, Given.Steps((150, 60)))));
+
+        var values = ActivityComputation.Compute(recording, Given.Person(), book, new ComputationSettings());
+
+        Assert.DoesNotContain(values.Quantities, quantity => quantity.Name == "individual_trimp");
+        Assert.Equal("trimp_weight without trimp_exponent: no individual training impulse", Assert.Single(values.Remarks));
     }
 
     /// <summary>Anchors hold on the local date: 23:30 UTC is the next day at +02:00.</summary>
@@ -96,7 +132,7 @@ public class ActivityComputationTests
         };
 
         Assert.Empty(Quantities(recording));
-        Assert.Single(Quantities(recording with { LocalOffset = Offset.FromHours(2) }));
+        Assert.NotEmpty(Quantities(recording with { LocalOffset = Offset.FromHours(2) }));
 
         IReadOnlyList<LoadWatch.Loads.Quantity> Quantities(Recording one) =>
             ActivityComputation.Compute(one, Given.Person(), book, new ComputationSettings()).Quantities;
@@ -129,8 +165,9 @@ public class ActivityComputationTests
                     [Channel.Power] = power[..rows],
                     [Channel.Speed] = speed[..rows],
                     [Channel.Distance] = speed[..rows],
+                    [Channel.Altitude] = power[..rows],
                 });
-            var values = Compute(Given.Recording("cycling", series) with { TimerSeconds = heartRate[0], ElapsedSeconds = power[0] });
+            var values = Compute(Given.Recording(step % 2 == 0 ? "cycling" : "running", series) with { TimerSeconds = heartRate[0], ElapsedSeconds = power[0] });
             return Numbers(values).All(double.IsFinite);
         });
 

@@ -71,6 +71,8 @@ public sealed class ConfigurationMistakesTests
         """loadwatch.json:1: computation.sports.cycling: "Legs" is not a body region; did you mean "legs"?""")]
     [InlineData("""{ "groups": [ { "load_quantity": "banister_trmp" } ] }""",
         """loadwatch.json:1: groups[0].load_quantity: "banister_trmp" is not a quantity; did you mean "banister_trimp"?""")]
+    [InlineData("""{ "groups": [ { "load_quantity": "distance_above_6_m_s" } ], "computation": { "speed_bounds": [2, 6.5] } }""",
+        """loadwatch.json:1: groups[0].load_quantity: "distance_above_6_m_s" is not a quantity; did you mean "distance_above_6_5_m_s"?""")]
     public void AWordThatNamesNothing(string json, string fault) => Assert.Equal([fault], ConfigurationFolder.FaultsWith("loadwatch.json", json));
 
     [Theory]

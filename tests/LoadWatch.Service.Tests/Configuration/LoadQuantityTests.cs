@@ -30,6 +30,25 @@ public sealed class LoadQuantityTests
         Assert.Contains("3.0 times the usual week (630 against 210 min)", sentence, StringComparison.Ordinal);
     }
 
+    [Theory]
+    [InlineData("distance_above_7_m_s", "[2, 4, 5.5, 7]")]
+    [InlineData("distance_above_6_25_m_s", "[2, 6.25]")]
+    public void AFastDistanceMayBeTheLoadWhereItsBoundIsOneOfTheSpeedZones(string quantity, string bounds)
+    {
+        var read = ConfigurationFolder.With(
+            "loadwatch.json",
+            $$"""{ "groups": [ { "id": "squad", "load_quantity": "{{quantity}}" } ], "computation": { "speed_bounds": {{bounds}} } }""");
+
+        Assert.Equal(quantity, read.Groups["squad"].LoadQuantity);
+    }
+
+    /// <summary>The highest speed of a day is not the sum of the highest speeds of its sessions.</summary>
+    [Fact]
+    public void TheTopSpeedIsNoLoad() => Assert.StartsWith(
+        "loadwatch.json:1: groups[0].load_quantity: \"speed_top\" is not a quantity",
+        Assert.Single(ConfigurationFolder.FaultsWith("loadwatch.json", """{ "groups": [ { "load_quantity": "speed_top" } ] }""")),
+        StringComparison.Ordinal);
+
     private static string Session(LocalDate date, string until) =>
         FormattableString.Invariant($"time,heart_rate_bpm\n{date:uuuu-MM-dd}T10:00:00Z,120\n{date:uuuu-MM-dd}T{until}:00Z,121\n");
 }

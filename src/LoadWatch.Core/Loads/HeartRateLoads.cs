@@ -1,0 +1,57 @@
+using LoadWatch.Activities;
+using LoadWatch.People;
+using LoadWatch.Recordings;
+using NodaTime;
+
+namespace LoadWatch.Loads;
+
+/// <summary>Every load that follows from heart rate and a person's anchors.</summary>
+public static class HeartRateLoads
+{
+    /// <summary>Only what can be computed, each at most once, and in plain words what hinders the others.</summary>
+    public static (IReadOnlyList<Quantity> Quantities, IReadOnlyList<string> Remarks) Of(
+        UsableRecording usable, LocalDate date, Person person, AnchorBook anchors)
+    {
+        if (!usable.Histograms.TryGetValue(Channel.HeartRate, out var heartRate))
+        {
+            return ([], []);
+        }
+
+        var (reserve, missing) = HeartRateReserve.On(date, person, anchors);
+        var (own, missingOfPair) = TrimpPair.On(date, person, anchors);
+        IEnumerable<Quantity?> quantities =
+        [
+            .. OfReserve(heartRate, reserve, own, person.Sex),
+            .. OfMaximum(heartRate, HeartRateMaximum.On(date, person, anchors)),
+            HeartRateThresholds.On(date, person, anchors) is { } thresholds
+                ? Load(QuantityNames.LuciaLoad, LuciaLoad.Of(heartRate, thresholds), thresholds.Estimated)
+                : null,
+        ];
+        return ([.. quantities.OfType<Quantity>()], [.. new[] { missing, missingOfPair }.OfType<string>()]);
+    }
+
+    private static IEnumerable<Quantity?> OfReserve(Histogram heartRate, HeartRateReserve? reserve, TrimpPair? own, Sex? sex)
+    {
+        if (reserve is null)
+        {
+            yield break;
+        }
+
+        yield return Load(QuantityNames.BanisterTrimp, BanisterTrimp.Of(heartRate, reserve, sex), reserve.Estimated || sex is null);
+        if (own is not null)
+        {
+            yield return Load(QuantityNames.IndividualTrimp, IndividualTrimp.Of(heartRate, reserve, own), reserve.Estimated || own.Estimated);
+        }
+    }
+
+    private static IEnumerable<Quantity?> OfMaximum(Histogram heartRate, HeartRateMaximum? max)
+    {
+        if (max is { Bpm: > 0 })
+        {
+            yield return Load(QuantityNames.EdwardsLoad, EdwardsLoad.Of(heartRate, max.Bpm), max.Estimated);
+            yield return Load(QuantityNames.StagnoLoad, StagnoLoad.Of(heartRate, max.Bpm), max.Estimated);
+        }
+    }
+
+    private static Quantity? Load(string name, double? value, bool estimated) => value is { } known ? new Quantity(name, known, "AU", estimated) : null;
+}
