@@ -5,6 +5,7 @@ using LoadWatch.Storage.Alerts;
 using LoadWatch.Storage.Audits;
 using LoadWatch.Storage.Configurations;
 using LoadWatch.Storage.Days;
+using LoadWatch.Storage.Decisions;
 using LoadWatch.Storage.Dialects;
 using LoadWatch.Storage.Findings;
 using LoadWatch.Storage.Notices;
@@ -32,6 +33,7 @@ public sealed class StoreSession
         Findings = new FindingTable(this);
         Evaluations = new EvaluationTable(this);
         Alerts = new AlertTable(this);
+        Decisions = new DecisionTable(this);
         Notices = new NoticeTable(this);
         People = new PersonStateTable(this);
         Configurations = new ConfigurationTable(this);
@@ -54,6 +56,8 @@ public sealed class StoreSession
     public EvaluationTable Evaluations { get; }
 
     public AlertTable Alerts { get; }
+
+    public DecisionTable Decisions { get; }
 
     public NoticeTable Notices { get; }
 

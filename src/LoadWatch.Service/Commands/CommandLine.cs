@@ -61,6 +61,8 @@ public static class CommandLine
         BriefCommand.Create(),
         PeopleCommand.Create(),
         AlertsCommand.Create(),
+        AckCommand.Create(),
+        AssignCommand.Create(),
         ExplainCommand.Create(),
         InspectCommand.Create(),
         ExportCommand.Create(),

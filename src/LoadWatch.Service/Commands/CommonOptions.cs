@@ -17,6 +17,10 @@ public static class CommonOptions
 
     public static Option<bool> Json() => new("--json") { Description = "Print JSON for programs." };
 
+    public static Option<string?> By() => new("--by") { Description = "Who decides.", HelpName = "NAME" };
+
+    public static Option<string?> Note() => new("--note") { Description = "Why, for whoever reads it later.", HelpName = "TEXT" };
+
     /// <summary>A date such as 2026-03-31; nothing else is taken.</summary>
     public static Option<LocalDate?> Date(string name, string description) => new(name)
     {

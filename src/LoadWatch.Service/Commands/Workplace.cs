@@ -54,6 +54,13 @@ public sealed class Workplace : IDisposable
         return new Workplace(configPath, configuration, folder, null, Store.Open(folder));
     }
 
+    /// <summary>
+    /// For decisions of staff: without the lock, since they must be possible while the service holds it. Each is one short transaction, and the database
+    /// lets a second writer wait for the first.
+    /// </summary>
+    /// <inheritdoc cref="OpenToWork"/>
+    public static Workplace OpenToDecide(string configPath) => OpenToRead(configPath);
+
     /// <summary>Takes over a new configuration; its data folder stays the one that is open.</summary>
     public WorkingConfiguration Adopt(WorkingConfiguration configuration) => Configuration = configuration;
 

@@ -4,6 +4,7 @@ using LoadWatch.Alerts;
 using LoadWatch.Findings;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage;
+using LoadWatch.Storage.Decisions;
 
 namespace LoadWatch.Service.Explain;
 
@@ -14,14 +15,19 @@ public static class AlertExplanation
     public static string? Of(StoreSession session, string id)
     {
         var person = id.Split('|')[0];
-        return session.Alerts.All(person).FirstOrDefault(alert => alert.Id == id) is { } known ? Write(known, session.Alerts.Changes.Of(id)) : null;
+        return session.Alerts.All(person).FirstOrDefault(alert => alert.Id == id) is { } known ? Write(known, session.Alerts.Changes.Of(id), session.Decisions.OfAlert(id)) : null;
     }
 
-    private static string Write(Alert alert, IReadOnlyList<AlertChange> changes)
+    private static string Write(Alert alert, IReadOnlyList<AlertChange> changes, IReadOnlyList<Decision> decisions)
     {
         var text = new StringBuilder();
         text.AppendLine(CultureInfo.InvariantCulture, $"{alert.Text}");
         text.AppendLine(CultureInfo.InvariantCulture, $"{Words.Of(alert.Severity)}, {Words.Of(alert.State)}, raised {Words.Date(alert.Raised)}");
+        foreach (var decision in decisions)
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"acknowledged{DecisionText.Circumstances(decision)}");
+        }
+
         foreach (var change in changes)
         {
             text.AppendLine();

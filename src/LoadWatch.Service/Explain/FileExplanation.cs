@@ -1,5 +1,6 @@
 using System.Globalization;
 using System.Text;
+using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage;
@@ -10,18 +11,12 @@ namespace LoadWatch.Service.Explain;
 /// <summary>What became of a file: its state with the reason, where it was seen, and the sessions it gave.</summary>
 public static class FileExplanation
 {
-    private const int FewestDigits = 6;
-
     /// <summary>Null where no arrival has that path or hash.</summary>
     public static string? Of(WorkingConfiguration configuration, StoreSession session, string word)
     {
-        var found = session.Arrivals.All().Where(arrival => IsMeant(session, arrival, word)).ToList();
+        var found = MeantArrivals.Of(session, word);
         return found.Count == 0 ? null : string.Join(Environment.NewLine, found.Select(arrival => Write(configuration, session, arrival)));
     }
-
-    private static bool IsMeant(StoreSession session, Arrival arrival, string word) =>
-        (word.Length >= FewestDigits && arrival.Sha.StartsWith(word, StringComparison.OrdinalIgnoreCase))
-        || session.Sightings.Of(arrival.Sha).Any(sighting => sighting.Path == word);
 
     private static string Write(WorkingConfiguration configuration, StoreSession session, Arrival arrival)
     {
@@ -36,6 +31,11 @@ public static class FileExplanation
         if (arrival.ParentSha is { } parent)
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"    came inside {parent[..12]}");
+        }
+
+        foreach (var decision in session.Decisions.OfArrival(arrival.Sha))
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"    assigned to {decision.Person}{DecisionText.Circumstances(decision)}");
         }
 
         foreach (var activity in configuration.People.Keys.SelectMany(id => session.Activities.OfPerson(id)))

@@ -10,13 +10,17 @@ namespace LoadWatch.Service.Pipeline;
 /// <summary>Every contact's page as of now: "not in yet" becomes "in" without waiting for the next brief.</summary>
 public sealed class Pages(WorkingConfiguration configuration, Store store, Briefs briefs, SweepReport report)
 {
-    /// <summary>All pages, or those for whose reader a new day began and those that are not there.</summary>
+    /// <summary>A decision is in the database well within this time of the moment that it carries.</summary>
+    private static readonly Duration Committed = Duration.FromMinutes(1);
+
+    /// <summary>All pages, or those that staff decided something since, for whose reader a new day began, and that are not there.</summary>
     public void Rewrite(Instant now, bool all)
     {
+        var decided = store.Read(session => session.Decisions.All()) is [.., var last] ? last.Made + Committed : Instant.MinValue;
         foreach (var contact in configuration.Contacts)
         {
             var path = Path.Combine(configuration.PagesFolder, $"{contact.Id}.html");
-            if (all || !IsOfToday(path, contact, now))
+            if (all || !IsOfToday(path, contact, now) || WrittenAt(path) < decided)
             {
                 Rewrite(contact, path);
             }
@@ -29,7 +33,9 @@ public sealed class Pages(WorkingConfiguration configuration, Store store, Brief
 
     private static bool IsOfToday(string path, Contact contact, Instant now) =>
         File.Exists(path)
-        && Instant.FromDateTimeUtc(File.GetLastWriteTimeUtc(path)).InZone(contact.Zone).Date == now.InZone(contact.Zone).Date;
+        && WrittenAt(path).InZone(contact.Zone).Date == now.InZone(contact.Zone).Date;
+
+    private static Instant WrittenAt(string path) => Instant.FromDateTimeUtc(File.GetLastWriteTimeUtc(path));
 
     private void Rewrite(Contact contact, string path)
     {

@@ -38,16 +38,23 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
 
     /// <summary>Contents that are new, or whose owner is told differently now, each once.</summary>
     private List<(ArrivalContent Content, IReadOnlyList<string> Claims, ArrivalState? Before)> Pending(IReadOnlyList<SeenContent> seen, bool force) =>
-        store.Read(session => seen
+        store.Read(session => Pending(session, seen, force));
+
+    private List<(ArrivalContent Content, IReadOnlyList<string> Claims, ArrivalState? Before)> Pending(
+        StoreSession session, IReadOnlyList<SeenContent> seen, bool force)
+    {
+        var decided = session.Decisions.Assigned();
+        return seen
             .GroupBy(item => item.Content.Sha, StringComparer.Ordinal)
             .Select(same =>
             {
                 var paths = session.Sightings.Of(same.Key).Select(sighting => sighting.Path).Concat(same.Select(item => item.Content.Path));
-                return (same.First().Content, Claims: Attribution.Claims(paths, configuration.People), Arrival: session.Arrivals.Get(same.Key));
+                return (same.First().Content, Claims: Attribution.Claims(decided.GetValueOrDefault(same.Key)?.Person, paths, configuration.People), Arrival: session.Arrivals.Get(same.Key));
             })
             .Where(item => force || IsPending(item.Arrival, item.Content, item.Claims))
             .Select(item => (item.Content, item.Claims, item.Arrival?.State))
-            .ToList());
+            .ToList();
+    }
 
     private static bool IsPending(Arrival? arrival, ArrivalContent content, IReadOnlyList<string> claims) => arrival?.State switch
     {

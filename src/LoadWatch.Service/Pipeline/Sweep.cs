@@ -20,6 +20,7 @@ public sealed class Sweep
     private readonly Intake intake;
     private readonly Recovery recovery;
     private readonly MovedFiles moved;
+    private readonly AssignedFiles assigned;
     private readonly Briefs briefs;
     private readonly ArchiveReader reader;
 
@@ -36,6 +37,7 @@ public sealed class Sweep
         intake = new Intake(configuration, store, archive, decoders, settlement, now, Report);
         recovery = new Recovery(store, archive, reader, settlement, probe);
         moved = new MovedFiles(configuration, store, reader, settlement, now);
+        assigned = new AssignedFiles(configuration, store, archive, reader, settlement, Report);
         briefs = new Briefs(configuration, now, Report.Unreadable);
     }
 
@@ -54,6 +56,7 @@ public sealed class Sweep
         InboxRemoval.PutBack(configuration);
         intake.TakeIn(Inboxes.Changed(configuration, store, Report), cancel);
         moved.TakeUp();
+        assigned.TakeUp(cancel);
         Evaluate(cancel);
         Report.InAll = store.Read(session => session.Arrivals.CountByState());
         return Report;

@@ -32,7 +32,7 @@ public sealed class DerivedRows
 
     public void SetConfigHash(string hash) => session.Execute(Upsert, new { hash });
 
-    /// <summary>Deletes every derived row. What is true stays: arrivals, sightings, alerts, notices, configurations, evaluations.</summary>
+    /// <summary>Deletes every derived row. What is true stays: arrivals, sightings, decisions, alerts, notices, configurations, evaluations.</summary>
     public void Empty()
     {
         foreach (var delete in Deletes)

@@ -105,6 +105,15 @@ internal sealed class WorkingFolder : IDisposable
 
     public SweepReport Rebuild(Instant? now = null) => Work(now, null, sweep => sweep.Rebuild(CancellationToken.None));
 
+    /// <summary>Decides whose a content is, as the command does.</summary>
+    public void Assign(byte[] bytes, string person, Instant? now = null)
+    {
+        using var workplace = Workplace.OpenToDecide(ConfigPath);
+        using var said = new StringWriter();
+        var code = AssignCommand.Run(workplace.Store, Sha(bytes), person, new Circumstances(now ?? Now), said, said);
+        Xunit.Assert.True(code == ExitCode.Ok, said.ToString());
+    }
+
     /// <summary>All five tables as text.</summary>
     public string Export() => string.Join('\n', Exporter.Tables.Select(table => $"{table}\n{Export(table)}"));
 

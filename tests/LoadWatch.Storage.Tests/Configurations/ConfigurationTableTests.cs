@@ -1,4 +1,5 @@
 using LoadWatch.Storage.Audits;
+using LoadWatch.Storage.Decisions;
 
 namespace LoadWatch.Storage.Tests.Configurations;
 
@@ -42,6 +43,7 @@ public sealed class ConfigurationTableTests(SharedFolder shared) : StoreTest(sha
             session.Derived.SetConfigHash("one");
             session.Alerts.Put(Some.Alert());
             session.Alerts.Changes.Append(Some.Change(Some.Alert(), 1));
+            session.Decisions.Add(new Decision(DecisionKind.Assign, Some.Sha(1), "anna", Some.Moment, By: null, Note: null));
             session.Notices.Add(Some.Notice("coach", Some.Date), 1, []);
             session.Evaluations.Add("anna", Some.Date, "one");
             session.Configurations.Remember("one", "text");
@@ -60,6 +62,7 @@ public sealed class ConfigurationTableTests(SharedFolder shared) : StoreTest(sha
             Assert.Single(session.Arrivals.All());
             Assert.Single(session.Alerts.All());
             Assert.Single(session.Alerts.Changes.Since(0));
+            Assert.Single(session.Decisions.All());
             Assert.True(session.Notices.Exists("coach|brief|2026-03-01"));
             Assert.Equal(Some.Date, session.Evaluations.LastDate("anna"));
             Assert.Equal("one", session.Configurations.LatestHash());

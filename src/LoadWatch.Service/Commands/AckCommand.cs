@@ -1,0 +1,72 @@
+using System.CommandLine;
+using LoadWatch.Alerts;
+using LoadWatch.Service.Configuration;
+using LoadWatch.Service.Explain;
+using LoadWatch.Service.Export;
+using LoadWatch.Storage;
+using LoadWatch.Storage.Decisions;
+using NodaTime;
+
+namespace LoadWatch.Service.Commands;
+
+/// <summary><c>loadwatch ack</c>: somebody has seen an alert.</summary>
+public static class AckCommand
+{
+    public static Command Create()
+    {
+        var alert = new Argument<string>("alert") { Description = "Id of an alert, as loadwatch alerts prints it." };
+        var (by, note, config) = (CommonOptions.By(), CommonOptions.Note(), CommonOptions.Config());
+        var command = new Command("ack", "Say that an alert was seen; possible while the service runs.") { alert, by, note, config };
+        command.SetAction(parsed =>
+        {
+            using var workplace = Workplace.OpenToDecide(parsed.GetValue(config)!);
+            var circumstances = new Circumstances(MachineClock.Now(), parsed.GetValue(by), parsed.GetValue(note));
+            return Run(workplace, parsed.GetValue(alert)!, circumstances, Console.Out, Console.Error);
+        });
+        return command;
+    }
+
+    /// <returns>An exit code of <see cref="ExitCode"/>.</returns>
+    public static int Run(Workplace workplace, string alertId, Circumstances circumstances, TextWriter output, TextWriter errors)
+    {
+        if (workplace.Store.Write(session => Acknowledge(workplace.Configuration, session, alertId, circumstances)) is { } said)
+        {
+            output.WriteLine(said);
+            return ExitCode.Ok;
+        }
+
+        var known = workplace.Store.Read(session => session.Alerts.All()).Select(alert => alert.Id);
+        errors.WriteLine($"\"{alertId}\" is no alert known here{Nearest.Hint(alertId, known)}");
+        return ExitCode.Usage;
+    }
+
+    /// <returns>What to say, or null where there is no such alert.</returns>
+    private static string? Acknowledge(WorkingConfiguration configuration, StoreSession session, string alertId, Circumstances circumstances)
+    {
+        if (session.Alerts.Get(alertId) is not { } alert)
+        {
+            return null;
+        }
+
+        var zone = configuration.People.GetValueOrDefault(alert.Key.Person)?.Zone ?? DateTimeZone.Utc;
+        var review = AlertReview.Acknowledge(alert, circumstances.Now.InZone(zone).Date, id => session.Alerts.Changes.NextSequence(id) - 1);
+        if (review is not { Changes: [var change], Alerts: [var changed] })
+        {
+            return AlreadySaid(alert, session.Decisions.OfAlert(alertId));
+        }
+
+        session.Decisions.Add(new Decision(
+            DecisionKind.Acknowledge, alertId, alert.Key.Person, circumstances.Now, circumstances.By, circumstances.Note));
+        session.Alerts.Put(changed);
+        session.Alerts.Changes.Append(change);
+        session.Audits.Add("acknowledged", alertId, circumstances.Now);
+        return $"Acknowledged: {alert.Text}";
+    }
+
+    private static string AlreadySaid(Alert alert, IReadOnlyList<Decision> decisions) =>
+        (alert.State, decisions) switch
+        {
+            (AlertState.Acknowledged, [.., var last]) => $"Already acknowledged{DecisionText.Circumstances(last)}",
+            _ => $"Nothing to acknowledge: the alert is {Words.Of(alert.State)}.",
+        };
+}
