@@ -109,13 +109,15 @@ public sealed class AckCommandTests : IDisposable
     public void ThePageIsWrittenAgainAlthoughNothingElseIsNew()
     {
         var page = Path.Combine(folder.Root, "pages", "staff.html");
+        using var running = Workplace.OpenToWork(folder.ConfigPath);
+        running.NewSweep(WorkingFolder.Now).Run(TestContext.Current.CancellationToken);
         File.WriteAllText(page, "old");
         File.SetLastWriteTimeUtc(page, WorkingFolder.Now.ToDateTimeUtc());
-        folder.Sweep();
+        running.NewSweep(WorkingFolder.Now).Run(TestContext.Current.CancellationToken);
         Assert.Equal("old", File.ReadAllText(page));
 
         Ack(alert);
-        folder.Sweep();
+        running.NewSweep(WorkingFolder.Now).Run(TestContext.Current.CancellationToken);
 
         Assert.NotEqual("old", File.ReadAllText(page));
     }
