@@ -11,15 +11,18 @@ public static class ChannelLimits
     /// <summary>No distance or height is larger, metres; a hostile one would overflow a sum.</summary>
     private const double Largest = 1e9;
 
+    /// <summary>On foot nobody is faster, m/s; what is, is a jump of the position.</summary>
+    private const double FastestOnFoot = 13;
+
     /// <summary>
-    /// Heart rate 25 to 250 bpm (so 0, a lost contact, and 254, a code for none, are out); power 0 to 3000 W; speed 0 to 45 m/s; every other channel
-    /// up to 1e9. Never true for NaN or infinity.
+    /// Heart rate 25 to 250 bpm (so 0, a lost contact, and 254, a code for none, are out); power 0 to 3000 W; speed 0 to 45 m/s, on foot and in team sports
+    /// to 13 m/s; every other channel up to 1e9. Never true for NaN or infinity.
     /// </summary>
-    public static bool Usable(Channel channel, double value) => channel switch
+    public static bool Usable(Channel channel, double value, Sport sport) => channel switch
     {
         Channel.HeartRate => value is >= 25 and <= 250,
         Channel.Power => value is >= 0 and <= 3000,
-        Channel.Speed => value is >= 0 and <= 45,
+        Channel.Speed => value >= 0 && value <= (sport.IsOnFoot || sport.IsTeamSport ? FastestOnFoot : 45),
         _ => Math.Abs(value) <= Largest,
     };
 }

@@ -28,9 +28,9 @@ public static class UsableSamples
         }
 
         SortByTime(rows);
-        var usable = rows.TrueForAll(row => ChannelLimits.Usable(channel, row.Value))
+        var usable = rows.TrueForAll(row => ChannelLimits.Usable(channel, row.Value, recording.Sport))
             ? rows
-            : rows.FindAll(row => ChannelLimits.Usable(channel, row.Value));
+            : rows.FindAll(row => ChannelLimits.Usable(channel, row.Value, recording.Sport));
         return new UsableChannel(channel, WithDurations(usable), Share(usable, rows));
     }
 
@@ -53,7 +53,7 @@ public static class UsableSamples
     /// <summary>Beats of their own join at their own times; within one second a usable reading of the records wins.</summary>
     private static List<Row> LateRows(IReadOnlyList<TimedHeartRate> late, List<Row> rows)
     {
-        var taken = rows.Where(row => ChannelLimits.Usable(Channel.HeartRate, row.Value)).Select(row => Second(row.Time)).ToHashSet();
+        var taken = rows.Where(row => ChannelLimits.Usable(Channel.HeartRate, row.Value, Sport.Generic)).Select(row => Second(row.Time)).ToHashSet();
         return late
             .Where(beat => !taken.Contains(Second(beat.UnixMilliseconds)))
             .Select(beat => new Row(beat.UnixMilliseconds, beat.BeatsPerMinute))

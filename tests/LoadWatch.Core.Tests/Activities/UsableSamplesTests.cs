@@ -47,7 +47,15 @@ public class UsableSamplesTests
     [InlineData(Channel.Altitude, -400, true)]
     [InlineData(Channel.Altitude, double.PositiveInfinity, false)]
     [InlineData(Channel.Power, double.NaN, false)]
-    public void LimitsCutWhatCannotBe(Channel channel, double value, bool usable) => Assert.Equal(usable, ChannelLimits.Usable(channel, value));
+    public void LimitsCutWhatCannotBe(Channel channel, double value, bool usable) => Assert.Equal(usable, ChannelLimits.Usable(channel, value, Sport.Generic));
+
+    [Theory]
+    [InlineData("running", 13.0, true)]
+    [InlineData("running", 13.1, false)]
+    [InlineData("soccer", 13.1, false)]
+    [InlineData("cycling", 25, true)]
+    public void NobodyIsFasterOnFootThanAPositionJumps(string sport, double metresPerSecond, bool usable) =>
+        Assert.Equal(usable, ChannelLimits.Usable(Channel.Speed, metresPerSecond, new Sport(sport)));
 
     /// <summary>By hand: usable from 0 to 4 s of 10 s.</summary>
     [Fact]
