@@ -2,6 +2,7 @@ using LoadWatch.Recordings;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
+using LoadWatch.Storage.Archives;
 using LoadWatch.Storage.Recordings;
 using NodaTime;
 
@@ -11,29 +12,30 @@ namespace LoadWatch.Service.Arrivals;
 /// Takes up held contents that somebody has put right by moving the file: a name that is gone from an inbox that keeps its files says nothing any more,
 /// as long as another name of the same content is still there.
 /// </summary>
-public sealed class MovedFiles(WorkingConfiguration configuration, Store store, ArchiveReader reader, Settlement settlement, Instant now)
+public sealed class MovedFiles(WorkingConfiguration configuration, Store store, Archive archive, ArchiveReader reader, Settlement settlement, Instant now)
 {
     public void TakeUp()
     {
-        foreach (var arrival in store.Read(session => session.Arrivals.All()).Where(arrival => arrival.State == ArrivalState.Held))
+        foreach (var arrival in store.Read(session => session.Arrivals.InState(ArrivalState.Held)))
         {
             var names = store.Read(session => session.Sightings.Of(arrival.Sha)).ToLookup(IsThere);
-            if (names[true].Any() && names[false].Any())
+            if (names[true].Any() && names[false].Any() && archive.Verify(arrival.ObjectSha))
             {
-                Forget(arrival, names[false].ToList());
-                settlement.Settle(reader.Kept(arrival.ObjectSha).Where(seen => seen.Content.Sha == arrival.Sha).ToList(), force: true);
+                var gone = names[false].ToList();
+                var content = reader.Kept(arrival.ObjectSha).Where(seen => seen.Content.Sha == arrival.Sha).ToList();
+                settlement.Settle(content, force: true, gone, session => Forget(session, arrival, gone));
             }
         }
     }
 
-    private void Forget(Arrival arrival, List<Sighting> gone) => store.Write(session =>
+    private void Forget(StoreSession session, Arrival arrival, List<Sighting> gone)
     {
         foreach (var sighting in gone)
         {
             session.Sightings.Forget(sighting);
             session.Audits.Add("sighting_forgotten", $"{arrival.Sha[..12]} is no longer in {sighting.Inbox}", now);
         }
-    });
+    }
 
     /// <summary>Also true where it cannot be told: the inbox empties itself, is away, or is no longer configured.</summary>
     private bool IsThere(Sighting sighting) =>

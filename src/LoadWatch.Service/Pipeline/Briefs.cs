@@ -141,8 +141,8 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     private List<BriefLine> Files(StoreSession session, Contact contact)
     {
         var people = configuration.PeopleOf(contact).Select(person => person.Id).ToHashSet(StringComparer.Ordinal);
-        return session.Arrivals.All()
-            .Where(arrival => arrival.State is ArrivalState.Held or ArrivalState.Refused)
+        return session.Arrivals.InState(ArrivalState.Held)
+            .Concat(session.Arrivals.InState(ArrivalState.Refused))
             .Select(arrival => (arrival, Sightings: session.Sightings.Of(arrival.Sha)))
             .Where(item => Concerns(item.Sightings.Select(sighting => sighting.Path), contact, people) && (item.arrival.State == ArrivalState.Held || IsRecent(item.Sightings)))
             .Select(item => new BriefLine(item.Sightings[0].Path, Sentence(item.arrival)))

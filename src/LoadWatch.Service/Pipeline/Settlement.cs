@@ -11,14 +11,19 @@ namespace LoadWatch.Service.Pipeline;
 public sealed class Settlement(WorkingConfiguration configuration, Store store, ArrivalDecoder decoder, SweepReport report)
 {
     /// <param name="force">Decode and judge again even where nothing about the arrival changed.</param>
-    public void Settle(IReadOnlyList<SeenContent> seen, bool force)
+    public void Settle(IReadOnlyList<SeenContent> seen, bool force) => Settle(seen, force, [], _ => { });
+
+    /// <param name="gone">Sightings that name nobody any more.</param>
+    /// <param name="alongside">Written in the same commit as the effects.</param>
+    public void Settle(IReadOnlyList<SeenContent> seen, bool force, IReadOnlyList<Sighting> gone, Action<StoreSession> alongside)
     {
-        var pending = Pending(seen, force);
+        var pending = store.Read(session => Pending(session, seen, force, gone));
         var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims)).ToList();
         var before = pending.ToDictionary(item => item.Content.Sha, item => item.Before, StringComparer.Ordinal);
         KillPoint.Pass("decoded");
         store.Write(session =>
         {
+            alongside(session);
             RecordMembers(session, seen);
             var effects = new ArrivalEffects(session, decoder);
             foreach (var arrival in decoded)
@@ -37,18 +42,17 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
     }
 
     /// <summary>Contents that are new, or whose owner is told differently now, each once.</summary>
-    private List<(ArrivalContent Content, IReadOnlyList<string> Claims, ArrivalState? Before)> Pending(IReadOnlyList<SeenContent> seen, bool force) =>
-        store.Read(session => Pending(session, seen, force));
-
     private List<(ArrivalContent Content, IReadOnlyList<string> Claims, ArrivalState? Before)> Pending(
-        StoreSession session, IReadOnlyList<SeenContent> seen, bool force)
+        StoreSession session, IReadOnlyList<SeenContent> seen, bool force, IReadOnlyList<Sighting> gone)
     {
         var decided = session.Decisions.Assigned();
         return seen
             .GroupBy(item => item.Content.Sha, StringComparer.Ordinal)
             .Select(same =>
             {
-                var paths = session.Sightings.Of(same.Key).Select(sighting => sighting.Path).Concat(same.Select(item => item.Content.Path));
+                // A content read back from the archive was seen under the names on record; one seen now has its name besides.
+                var paths = session.Sightings.Of(same.Key).Except(gone).Select(sighting => sighting.Path)
+                    .Concat(same.Where(item => item.Origin is not null).Select(item => item.Content.Path));
                 return (same.First().Content, Claims: Attribution.Claims(decided.GetValueOrDefault(same.Key)?.Person, paths, configuration.People), Arrival: session.Arrivals.Get(same.Key));
             })
             .Where(item => force || IsPending(item.Arrival, item.Content, item.Claims))

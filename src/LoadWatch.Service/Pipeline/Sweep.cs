@@ -36,7 +36,7 @@ public sealed class Sweep
         settlement = new Settlement(configuration, store, decoder, Report);
         intake = new Intake(configuration, store, archive, decoders, settlement, now, Report);
         recovery = new Recovery(store, archive, reader, settlement, probe);
-        moved = new MovedFiles(configuration, store, reader, settlement, now);
+        moved = new MovedFiles(configuration, store, archive, reader, settlement, now);
         assigned = new AssignedFiles(configuration, store, archive, reader, settlement, Report);
         briefs = new Briefs(configuration, now, Report.Unreadable);
     }

@@ -16,6 +16,7 @@ public sealed class ArrivalTable
 
     private const string SelectOne = $"SELECT {Columns} FROM arrival WHERE sha = @sha";
     private const string SelectWaiting = $"SELECT {Columns} FROM arrival WHERE state = 'waiting' ORDER BY sha";
+    private const string SelectInState = $"SELECT {Columns} FROM arrival WHERE state = @state ORDER BY sha";
     private const string SelectAll = $"SELECT {Columns} FROM arrival ORDER BY sha";
     private const string Count = "SELECT state, COUNT(*) AS number FROM arrival GROUP BY state";
     private const string Update = "UPDATE arrival SET state = @state, kind = @kind, reason = @reason, person = @person WHERE sha = @sha";
@@ -34,6 +35,10 @@ public sealed class ArrivalTable
 
     /// <summary>Every arrival not decoded yet, sorted by content.</summary>
     public IReadOnlyList<Arrival> Waiting() => Select(SelectWaiting + session.Dialect.ClaimClause);
+
+    /// <summary>Every arrival in a state, sorted by content. What every sweep looks at asks for this, so that its cost does not grow with the stored ones.</summary>
+    public IReadOnlyList<Arrival> InState(ArrivalState state) =>
+        session.Rows<Row>(SelectInState, new { state = Words<ArrivalState>.Of(state) }).ConvertAll(row => row.ToArrival());
 
     /// <summary>Every arrival, sorted by content.</summary>
     public IReadOnlyList<Arrival> All() => Select(SelectAll);

@@ -29,6 +29,25 @@ public sealed class SetbackTests : IDisposable
     }
 
     [Fact]
+    public void AnArchiveMovedOutOfTheWrongFolderBelongsToItsOwner()
+    {
+        var ride = Some.Fit(Some.Yesterday);
+        var zip = Some.Zip(("ride.fit", ride));
+        var wrong = folder.Put("anna/week.zip", zip);
+        folder.Put("bo/week.zip", zip);
+        folder.Sweep();
+        Assert.Equal(ArrivalState.Held, folder.Arrival(ride)!.State);
+
+        File.Delete(wrong);
+        folder.Sweep();
+
+        Assert.Equal((ArrivalState.Stored, "bo"), (folder.Arrival(ride)!.State, folder.Arrival(ride)!.Person));
+        var before = folder.Export();
+        folder.Rebuild();
+        Assert.Equal(before, folder.Export());
+    }
+
+    [Fact]
     public void AFileThatIsGoneFromEverywhereKeepsItsOwner()
     {
         var ride = Some.Fit(Some.Yesterday);

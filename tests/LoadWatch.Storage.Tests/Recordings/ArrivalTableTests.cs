@@ -42,6 +42,8 @@ public sealed class ArrivalTableTests(SharedFolder shared) : StoreTest(shared)
         });
 
         Assert.Equal([Some.Sha(1), Some.Sha(3)], Store.Read(session => session.Arrivals.Waiting()).Select(arrival => arrival.Sha));
+        Assert.Equal([Some.Sha(2)], Store.Read(session => session.Arrivals.InState(ArrivalState.Refused)).Select(arrival => arrival.Sha));
+        Assert.Empty(Store.Read(session => session.Arrivals.InState(ArrivalState.Held)));
         Assert.Equal([Some.Sha(1), Some.Sha(2), Some.Sha(3)], Store.Read(session => session.Arrivals.All()).Select(arrival => arrival.Sha));
     }
 
