@@ -11,6 +11,7 @@ using LoadWatch.Storage.Findings;
 using LoadWatch.Storage.Notices;
 using LoadWatch.Storage.People;
 using LoadWatch.Storage.Recordings;
+using LoadWatch.Storage.Rows;
 
 namespace LoadWatch.Storage;
 
@@ -35,6 +36,7 @@ public sealed class StoreSession
         Alerts = new AlertTable(this);
         Decisions = new DecisionTable(this);
         Notices = new NoticeTable(this);
+        TableRows = new RowTable(this);
         People = new PersonStateTable(this);
         Configurations = new ConfigurationTable(this);
         Derived = new DerivedRows(this);
@@ -60,6 +62,8 @@ public sealed class StoreSession
     public DecisionTable Decisions { get; }
 
     public NoticeTable Notices { get; }
+
+    public RowTable TableRows { get; }
 
     public PersonStateTable People { get; }
 

@@ -11,8 +11,9 @@ public sealed class SilenceRule : IRule
 {
     public string Name => "silence";
 
-    public IEnumerable<Finding> Evaluate(Person person, IReadOnlyList<Day> days, RuleLimits limits)
+    public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
+        var (person, days, limits) = subject;
         var recorded = new List<LocalDate>();
         RecordingRhythm? rhythm = null;
         foreach (var day in days)

@@ -16,8 +16,8 @@ public sealed class StimulusGapRule : IRule
 
     public string Name => "stimulus_gap";
 
-    public IEnumerable<Finding> Evaluate(Person person, IReadOnlyList<Day> days, RuleLimits limits) =>
-        Regions.SelectMany(region => Evaluate(person, region, days, limits.StimulusGap)).OrderBy(finding => finding.Date);
+    public IEnumerable<Finding> Evaluate(RuleSubject subject) =>
+        Regions.SelectMany(region => Evaluate(subject.Person, region, subject.Days, subject.Limits.StimulusGap)).OrderBy(finding => finding.Date);
 
     private IEnumerable<Finding> Evaluate(Person person, BodyRegion region, IReadOnlyList<Day> days, StimulusGapLimits limits)
     {

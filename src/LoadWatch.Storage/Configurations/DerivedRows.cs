@@ -20,6 +20,7 @@ public sealed class DerivedRows
         "DELETE FROM histogram",
         "DELETE FROM activity",
         "DELETE FROM recording",
+        "DELETE FROM table_row",
         "DELETE FROM derived_state",
     ];
 
