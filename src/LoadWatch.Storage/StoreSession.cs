@@ -11,6 +11,7 @@ using LoadWatch.Storage.Findings;
 using LoadWatch.Storage.Notices;
 using LoadWatch.Storage.People;
 using LoadWatch.Storage.Recordings;
+using LoadWatch.Storage.Rows;
 
 namespace LoadWatch.Storage;
 
@@ -35,6 +36,9 @@ public sealed class StoreSession
         Alerts = new AlertTable(this);
         Decisions = new DecisionTable(this);
         Notices = new NoticeTable(this);
+        TableRows = new RowTable(this);
+        TableVersions = new TableVersionTable(this);
+        Questions = new QuestionTable(this);
         People = new PersonStateTable(this);
         Configurations = new ConfigurationTable(this);
         Derived = new DerivedRows(this);
@@ -60,6 +64,12 @@ public sealed class StoreSession
     public DecisionTable Decisions { get; }
 
     public NoticeTable Notices { get; }
+
+    public RowTable TableRows { get; }
+
+    public TableVersionTable TableVersions { get; }
+
+    public QuestionTable Questions { get; }
 
     public PersonStateTable People { get; }
 

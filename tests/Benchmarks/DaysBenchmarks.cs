@@ -26,6 +26,6 @@ public class DaysBenchmarks
     private IReadOnlyList<Finding> Evaluate(int days)
     {
         var through = First.PlusDays(days);
-        return RuleBook.Evaluate(LongRide.Person, LoadCalendar.Build("p1", activities, through), new RuleLimits());
+        return RuleBook.Evaluate(new RuleSubject(LongRide.Person, LoadCalendar.Build("p1", activities, through), new RuleLimits()));
     }
 }

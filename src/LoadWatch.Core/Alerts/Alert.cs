@@ -32,8 +32,8 @@ public sealed record Alert(
     Severity Severity,
     string Text)
 {
-    /// <summary><c>person|rule|region|raised</c>, the region empty where there is none.</summary>
-    public string Id => $"{Key.Person}|{Key.Rule}|{RegionWord(Key.Region)}|{Raised:uuuu-MM-dd}";
+    /// <summary><c>person|rule|about|raised</c>: the region or the quantity, empty where there is neither.</summary>
+    public string Id => $"{Key.Person}|{Key.Rule}|{Key.Quantity ?? RegionWord(Key.Region)}|{Raised:uuuu-MM-dd}";
 
     public static string RegionWord(BodyRegion? region) => region is { } known ? BodyRegions.Word(known) : "";
 }

@@ -1,3 +1,4 @@
+using LoadWatch.Plans;
 using LoadWatch.Stimulus;
 using NodaTime;
 
@@ -73,6 +74,9 @@ public sealed record Day
 
     /// <summary>Days since the last recorded day, 0 on a recorded day; null before any.</summary>
     public int? DaysSinceRecorded { get; init; }
+
+    /// <summary>What plan and answers say of the date.</summary>
+    public DayPlan Plan { get; init; } = DayPlan.None;
 
     public IReadOnlyDictionary<BodyRegion, RegionDay> Regions { get; init; } = new Dictionary<BodyRegion, RegionDay>();
 }

@@ -24,12 +24,15 @@ public sealed record Finding(
     string Text,
     Evidence Evidence)
 {
+    /// <summary>Name of the quantity that the rule looked at where it is not the group's load; null for the load.</summary>
+    public string? Quantity { get; init; }
+
     /// <summary>What the finding is about, the same on every date.</summary>
-    public FindingKey Key => new(Person, Rule, Region);
+    public FindingKey Key => new(Person, Rule, Region, Quantity);
 }
 
-/// <summary>What a finding or an alert is about: a person, a rule, and for stimulus rules a region.</summary>
-public readonly record struct FindingKey(string Person, string Rule, BodyRegion? Region);
+/// <summary>What a finding or an alert is about: a person, a rule, for stimulus rules a region, and a quantity where it is not the group's load.</summary>
+public readonly record struct FindingKey(string Person, string Rule, BodyRegion? Region, string? Quantity = null);
 
 /// <summary>What a number rests on (I-8), enough to compute it again.</summary>
 /// <param name="Formula">In words and symbols.</param>

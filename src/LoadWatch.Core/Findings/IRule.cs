@@ -1,5 +1,3 @@
-using LoadWatch.Days;
-using LoadWatch.People;
 
 namespace LoadWatch.Findings;
 
@@ -10,9 +8,8 @@ public interface IRule
     string Name { get; }
 
     /// <summary>
-    /// The findings of every date in <paramref name="days"/> on which the rule holds, in date order. Raise and return values make the run; an unknown
+    /// The findings of every date of the subject on which the rule holds, in date order. Raise and return values make the run; an unknown
     /// stretch alone neither raises nor clears (I-6).
     /// </summary>
-    /// <param name="days">Unbroken days of the person, oldest first.</param>
-    IEnumerable<Finding> Evaluate(Person person, IReadOnlyList<Day> days, RuleLimits limits);
+    IEnumerable<Finding> Evaluate(RuleSubject subject);
 }

@@ -12,16 +12,16 @@ namespace LoadWatch.Findings;
 /// The last 7 days are well above the usual week. Raised at the limit, holds until below the return value; history and chronic load are
 /// asked for when it is raised, coverage always: a day covered too thinly leaves things as they were (I-6).
 /// </summary>
-/// <param name="loadUnit">Unit of the group's load in texts and evidence.</param>
-public sealed class LoadRatioRule(string loadUnit = LoadRatioRule.ArbitraryUnits) : IRule
+public sealed class LoadRatioRule : IRule
 {
     /// <summary>The unit of a training impulse.</summary>
     public const string ArbitraryUnits = "AU";
 
     public string Name => "load_ratio";
 
-    public IEnumerable<Finding> Evaluate(Person person, IReadOnlyList<Day> days, RuleLimits limits)
+    public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
+        var (person, days, limits) = subject;
         LocalDate? since = null;
         Day? read = null;
         foreach (var day in days)
@@ -34,7 +34,7 @@ public sealed class LoadRatioRule(string loadUnit = LoadRatioRule.ArbitraryUnits
 
             if (since is { } start && read is not null)
             {
-                yield return Find(person, day.Date, start, read, limits.LoadRatio);
+                yield return Find(person, day.Date, start, read, limits.LoadRatio, subject.LoadUnit);
             }
         }
     }
@@ -55,7 +55,7 @@ public sealed class LoadRatioRule(string loadUnit = LoadRatioRule.ArbitraryUnits
         && day.DaysSinceFirstCovered >= limits.HistoryDays
         && day.Chronic > Significant.Round(limits.ChronicShareOfMedian * day.ChronicMedian);
 
-    private Finding Find(Person person, LocalDate date, LocalDate since, Day read, LoadRatioLimits limits) => new(
+    private Finding Find(Person person, LocalDate date, LocalDate since, Day read, LoadRatioLimits limits, string loadUnit) => new(
         person.Id,
         date,
         Name,
@@ -65,10 +65,10 @@ public sealed class LoadRatioRule(string loadUnit = LoadRatioRule.ArbitraryUnits
         read.RatioUncoupled!.Value,
         limits.Raise,
         "ratio",
-        Sentence(date, since, read, limits),
-        Basis(read, limits));
+        Sentence(date, since, read, limits, loadUnit),
+        Basis(read, limits, loadUnit));
 
-    private string Sentence(LocalDate date, LocalDate since, Day read, LoadRatioLimits limits)
+    private static string Sentence(LocalDate date, LocalDate since, Day read, LoadRatioLimits limits, string loadUnit)
     {
         var (ratio, held) = (read.RatioUncoupled!.Value, read.Date != date);
         var what = $"Load of the last 7 days {(held ? "was" : "is")} {Wording.Ratio(ratio, limits.Raise)} times the usual week "
@@ -84,7 +84,7 @@ public sealed class LoadRatioRule(string loadUnit = LoadRatioRule.ArbitraryUnits
         _ => $"; it passed the limit of {Wording.Limit(limits.Raise)} on {since} and returns below {Wording.Limit(limits.Return)}",
     };
 
-    private Evidence Basis(Day read, LoadRatioLimits limits) => new(
+    private static Evidence Basis(Day read, LoadRatioLimits limits, string loadUnit) => new(
         "uncoupled ratio = load of the last 7 days / mean week of the 21 days before, both scaled to their known days",
         "Windt and Gabbett 2018, Br J Sports Med 53:988-990; limits: a choice",
         [

@@ -51,6 +51,12 @@ public static class QuantityNames
     /// <summary>High decelerations, count.</summary>
     public const string Decelerations = "decelerations";
 
+    /// <summary>Highest power held for 1 s, watts (W), not on foot. No load.</summary>
+    public const string PowerTop = "power_top";
+
+    /// <summary>Begins the name of an estimated one-repetition maximum, kilograms (kg); exercise and machine follow. No load.</summary>
+    public const string OneRepetitionMaxOf = "one_repetition_max_of_";
+
     /// <summary>Mechanical work, kilojoules (kJ).</summary>
     public const string Work = "work";
 

@@ -17,6 +17,14 @@ public enum Sex
 /// <param name="Zone">The zone whose midnight ends the person's day.</param>
 public sealed record Person(string Id, string Name, string Group, int? BirthYear, Sex? Sex, DateTimeZone Zone)
 {
+    /// <summary>First date from which on heart rate says nothing about this person's effort; null: it always does. The reason is never stored.</summary>
+    public LocalDate? HeartRateInvalidFrom { get; init; }
+
+    /// <summary>Other names under which tables know this person: full names, player numbers.</summary>
+    public IReadOnlyList<string> Aliases { get; init; } = [];
+
+    public bool HeartRateIsValidOn(LocalDate date) => !(date >= HeartRateInvalidFrom);
+
     /// <summary>Full years on 31 December of the date's year, or null.</summary>
     public int? AgeOn(LocalDate date) => BirthYear is { } year ? date.Year - year : null;
 }

@@ -9,11 +9,11 @@ namespace LoadWatch.Storage.Alerts;
 /// <summary>Tables <c>alert</c> and <c>alert_change</c>: where each alert stands, and every step of how it came there.</summary>
 public sealed class AlertTable
 {
-    private const string Columns = "id, person, rule, region, raised, judged, state, severity, text";
+    private const string Columns = "id, person, rule, about, raised, judged, state, severity, text";
 
     private const string Upsert = $"""
         INSERT INTO alert ({Columns})
-        VALUES (@Id, @Person, @Rule, @Region, @Raised, @Judged, @State, @Severity, @Text)
+        VALUES (@Id, @Person, @Rule, @About, @Raised, @Judged, @State, @Severity, @Text)
         ON CONFLICT (id) DO UPDATE SET judged = excluded.judged, state = excluded.state, severity = excluded.severity, text = excluded.text
         """;
 
@@ -54,7 +54,7 @@ public sealed class AlertTable
 
         public string Rule { get; init; } = "";
 
-        public string Region { get; init; } = "";
+        public string About { get; init; } = "";
 
         public LocalDate Raised { get; init; }
 
@@ -71,7 +71,7 @@ public sealed class AlertTable
             Id = alert.Id,
             Person = alert.Key.Person,
             Rule = alert.Key.Rule,
-            Region = RegionWord.Of(alert.Key.Region),
+            About = AboutWord.Of(alert.Key.Region, alert.Key.Quantity),
             Raised = alert.Raised,
             Judged = alert.Judged,
             State = Words<AlertState>.Of(alert.State),
@@ -80,7 +80,7 @@ public sealed class AlertTable
         };
 
         public Alert ToAlert() => new(
-            new FindingKey(Person, Rule, RegionWord.Parse(Region)),
+            new FindingKey(Person, Rule, AboutWord.Region(About), AboutWord.Quantity(About)),
             Raised,
             Judged,
             Words<AlertState>.Parse(State),

@@ -20,6 +20,10 @@ public sealed class DerivedRows
         "DELETE FROM histogram",
         "DELETE FROM activity",
         "DELETE FROM recording",
+        "DELETE FROM table_row",
+        "DELETE FROM table_version",
+        "DELETE FROM table_content",
+        "DELETE FROM question",
         "DELETE FROM derived_state",
     ];
 

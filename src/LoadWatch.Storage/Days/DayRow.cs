@@ -1,4 +1,5 @@
 using LoadWatch.Days;
+using LoadWatch.Plans;
 using LoadWatch.Stimulus;
 using LoadWatch.Storage.Dialects;
 using NodaTime;
@@ -8,6 +9,8 @@ namespace LoadWatch.Storage.Days;
 /// <summary>A row of <c>day</c>.</summary>
 internal sealed class DayRow
 {
+    private const string NoPlan = "{}";
+
     public string Person { get; init; } = "";
 
     public LocalDate Date { get; init; }
@@ -50,6 +53,8 @@ internal sealed class DayRow
 
     public int? DaysSinceRecorded { get; init; }
 
+    public string Plan { get; init; } = "";
+
     public string Regions { get; init; } = "";
 
     public static DayRow From(Day day) => new()
@@ -75,6 +80,7 @@ internal sealed class DayRow
         Coverage28 = day.Coverage28,
         DaysSinceFirstCovered = day.DaysSinceFirstCovered,
         DaysSinceRecorded = day.DaysSinceRecorded,
+        Plan = day.Plan == DayPlan.None ? NoPlan : JsonText.Write(day.Plan),
         Regions = JsonText.WriteSorted(day.Regions),
     };
 
@@ -101,6 +107,7 @@ internal sealed class DayRow
         Coverage28 = Coverage28,
         DaysSinceFirstCovered = DaysSinceFirstCovered,
         DaysSinceRecorded = DaysSinceRecorded,
+        Plan = Plan == NoPlan ? DayPlan.None : JsonText.Read<DayPlan>(Plan),
         Regions = JsonText.Read<Dictionary<BodyRegion, RegionDay>>(Regions),
     };
 }

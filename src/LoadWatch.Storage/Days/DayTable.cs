@@ -9,7 +9,7 @@ public sealed class DayTable
     private const string Columns = """
         person, date, state, state_source, load, acute, chronic, chronic_before, ratio_coupled, ratio_uncoupled, ratio_ewma,
         ewma_acute, ewma_chronic, weekly_change, monotony, strain, chronic_median, coverage7, coverage28,
-        days_since_first_covered, days_since_recorded, regions
+        days_since_first_covered, days_since_recorded, plan, regions
         """;
 
     private const string Insert = $"""
@@ -17,7 +17,7 @@ public sealed class DayTable
         VALUES (
             @Person, @Date, @State, @StateSource, @Load, @Acute, @Chronic, @ChronicBefore, @RatioCoupled, @RatioUncoupled, @RatioEwma,
             @EwmaAcute, @EwmaChronic, @WeeklyChange, @Monotony, @Strain, @ChronicMedian, @Coverage7, @Coverage28,
-            @DaysSinceFirstCovered, @DaysSinceRecorded, @Regions)
+            @DaysSinceFirstCovered, @DaysSinceRecorded, @Plan, @Regions)
         """;
 
     private const string DeleteFrom = "DELETE FROM day WHERE person = @person AND date >= @from";

@@ -7,20 +7,20 @@ namespace LoadWatch.Storage.Findings;
 /// <summary>Table <c>finding</c>: which rule held for whom on which date, with what it rests on (I-8).</summary>
 public sealed class FindingTable
 {
-    private const string Columns = "person, date, rule, region, severity, since, value, limit_value, unit, text, evidence";
+    private const string Columns = "person, date, rule, about, severity, since, value, limit_value, unit, text, evidence";
 
     private const string Insert = $"""
         INSERT INTO finding ({Columns})
-        VALUES (@Person, @Date, @Rule, @Region, @Severity, @Since, @Value, @LimitValue, @Unit, @Text, @Evidence)
+        VALUES (@Person, @Date, @Rule, @About, @Severity, @Since, @Value, @LimitValue, @Unit, @Text, @Evidence)
         """;
 
     private const string DeleteFrom = "DELETE FROM finding WHERE person = @person AND date >= @from";
 
     private const string SelectOfPerson =
-        $"SELECT {Columns} FROM finding WHERE person = @person AND date >= @from AND date <= @to ORDER BY date, rule, region";
+        $"SELECT {Columns} FROM finding WHERE person = @person AND date >= @from AND date <= @to ORDER BY date, rule, about";
 
     private const string CountHeld =
-        "SELECT COUNT(*) FROM finding WHERE person = @person AND date = @date AND rule = @rule AND region = @region";
+        "SELECT COUNT(*) FROM finding WHERE person = @person AND date = @date AND rule = @rule AND about = @about";
 
     private readonly StoreSession session;
 
@@ -39,14 +39,14 @@ public sealed class FindingTable
         session.ExecuteEach(Insert, findings.Select(Row.From));
     }
 
-    /// <summary>A person's findings in the range, both ends included, sorted by date, rule and region.</summary>
+    /// <summary>A person's findings in the range, both ends included, sorted by date, rule and what they are about.</summary>
     public IReadOnlyList<Finding> OfPerson(string person, LocalDate? from = null, LocalDate? to = null) =>
         session.Rows<Row>(SelectOfPerson, new { person, from = from ?? LocalDate.MinIsoValue, to = to ?? LocalDate.MaxIsoValue })
             .ConvertAll(row => row.ToFinding());
 
     /// <summary>Whether the finding holds on a date.</summary>
     public bool Held(FindingKey key, LocalDate date) =>
-        session.Value<long>(CountHeld, new { person = key.Person, date, rule = key.Rule, region = RegionWord.Of(key.Region) }) > 0;
+        session.Value<long>(CountHeld, new { person = key.Person, date, rule = key.Rule, about = AboutWord.Of(key.Region, key.Quantity) }) > 0;
 
     private sealed class Row
     {
@@ -56,7 +56,7 @@ public sealed class FindingTable
 
         public string Rule { get; init; } = "";
 
-        public string Region { get; init; } = "";
+        public string About { get; init; } = "";
 
         public string Severity { get; init; } = "";
 
@@ -77,7 +77,7 @@ public sealed class FindingTable
             Person = finding.Person,
             Date = finding.Date,
             Rule = finding.Rule,
-            Region = RegionWord.Of(finding.Region),
+            About = AboutWord.Of(finding.Region, finding.Quantity),
             Severity = Words<Severity>.Of(finding.Severity),
             Since = finding.Since,
             Value = finding.Value,
@@ -91,13 +91,16 @@ public sealed class FindingTable
             Person,
             Date,
             Rule,
-            RegionWord.Parse(Region),
+            AboutWord.Region(About),
             Words<Severity>.Parse(Severity),
             Since,
             Value,
             LimitValue,
             Unit,
             Text,
-            JsonText.Read<Evidence>(Evidence));
+            JsonText.Read<Evidence>(Evidence))
+        {
+            Quantity = AboutWord.Quantity(About),
+        };
     }
 }

@@ -95,7 +95,7 @@ public class LoadRatioRuleTests
 
     [Fact]
     public void NamesTheUnitOfTheGroup() =>
-        Assert.Contains("(380 against 200 kJ)", new LoadRatioRule("kJ").Of(Ratios(1.9))[0].Text, StringComparison.Ordinal);
+        Assert.Contains("(380 against 200 kJ)", new LoadRatioRule().Evaluate(new RuleSubject(Anna, Ratios(1.9), Defaults) { LoadUnit = "kJ" }).First().Text, StringComparison.Ordinal);
 
     [Fact]
     public void TheEvidenceIsEnoughToComputeTheValueAgain()

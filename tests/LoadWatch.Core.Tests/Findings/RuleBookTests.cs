@@ -11,7 +11,7 @@ public class RuleBookTests
     public void RulesAreNamedAndInOrder() => Assert.Equal(["load_ratio", "stimulus_gap", "silence"], RuleBook.All.Select(rule => rule.Name));
 
     [Fact]
-    public void WithoutDaysThereAreNoFindings() => Assert.Empty(RuleBook.Evaluate(Anna, [], Watched.Defaults));
+    public void WithoutDaysThereAreNoFindings() => Assert.Empty(RuleBook.Evaluate(new RuleSubject(Anna, [], Watched.Defaults)));
 
     [Fact]
     public void FindingsAreSortedByDateRuleAndRegion()
@@ -47,7 +47,7 @@ public class RuleBookTests
     [Fact]
     public void TheGroupsUnitIsPassedOn() =>
         Assert.Contains(
-            RuleBook.Evaluate(Anna, BusyDays(), Watched.Defaults, "kJ"),
+            RuleBook.Evaluate(new RuleSubject(Anna, BusyDays(), Watched.Defaults) { LoadUnit = "kJ" }),
             finding => finding.Text.Contains(" kJ)", StringComparison.Ordinal));
 
     [Fact]
@@ -64,5 +64,5 @@ public class RuleBookTests
     private static IReadOnlyList<Day> BusyDays() => Build(60, [
         .. Enumerable.Range(0, 53).Select(day => Activity(day, day < 46 ? 100 : 220, stimulus: Bouts(day == 0 ? 5 : 1)))]);
 
-    private static IReadOnlyList<Finding> Busy() => RuleBook.Evaluate(Anna, BusyDays(), Watched.Defaults);
+    private static IReadOnlyList<Finding> Busy() => RuleBook.Evaluate(new RuleSubject(Anna, BusyDays(), Watched.Defaults));
 }

@@ -44,5 +44,5 @@ internal static class Watched
     public static List<Day> GapOf(int days, double? usual = null) => Enumerable.Range(0, days + 1).Select(day => Gap(day, day, usual: usual)).ToList();
 
     public static List<Finding> Of(this IRule rule, IReadOnlyList<Day> days, int? birthYear = 1990, RuleLimits? limits = null) =>
-        rule.Evaluate(Training.Anna with { BirthYear = birthYear }, days, limits ?? Defaults).ToList();
+        rule.Evaluate(new RuleSubject(Training.Anna with { BirthYear = birthYear }, days, limits ?? Defaults)).ToList();
 }

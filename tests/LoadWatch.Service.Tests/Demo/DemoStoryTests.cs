@@ -43,7 +43,7 @@ public class DemoStoryTests
         {
             var person = DemoPerson.Draw(part, seed, until);
             var days = Days(person, seed, until);
-            var alerts = RuleBook.Evaluate(person.Person, days, new RuleLimits())
+            var alerts = RuleBook.Evaluate(new RuleSubject(person.Person, days, new RuleLimits()))
                 .Where(finding => finding.Date == until.PlusDays(-1))
                 .Select(finding => new DemoAlert(finding.Person, finding.Rule, finding.Region, finding.Severity));
             return new End(part, days[^1], [.. alerts]);

@@ -1,0 +1,34 @@
+using LoadWatch.Activities;
+using LoadWatch.Days;
+using LoadWatch.People;
+using LoadWatch.Plans;
+using LoadWatch.Rows;
+using NodaTime;
+
+namespace LoadWatch.Findings;
+
+/// <summary>Everything that rules look at for one person.</summary>
+/// <param name="Days">Unbroken days of the person by the group's load, oldest first; each carries what plan and answers say of it.</param>
+/// <param name="Limits">Of the person's group.</param>
+public sealed record RuleSubject(Person Person, IReadOnlyList<Day> Days, RuleLimits Limits)
+{
+    /// <summary>Unit of the group's load, for texts and evidence.</summary>
+    public string LoadUnit { get; init; } = LoadRatioRule.ArbitraryUnits;
+
+    /// <summary>What counts of the person's training up to the last day, by date, then key.</summary>
+    public IReadOnlyList<JoinedActivity> Activities { get; init; } = [];
+
+    public PersonPlan Plan { get; init; } = PersonPlan.None;
+
+    /// <summary>Function tests up to the last day, by date.</summary>
+    public IReadOnlyList<DatedTest> Tests { get; init; } = [];
+
+    /// <summary>Days by other quantities that the limits name, by name of the quantity; each as long as <see cref="Days"/>.</summary>
+    public IReadOnlyDictionary<string, QuantitySeries> Series { get; init; } = new Dictionary<string, QuantitySeries>();
+}
+
+/// <summary>The days of a quantity other than the group's load.</summary>
+public sealed record QuantitySeries(string Quantity, string Unit, IReadOnlyList<Day> Days);
+
+/// <summary>A function test or reference value of a date.</summary>
+public sealed record DatedTest(LocalDate Date, TestRow Test);

@@ -1,0 +1,110 @@
+using LoadWatch.Rows;
+using LoadWatch.Storage.Dialects;
+using NodaTime;
+
+namespace LoadWatch.Storage.Rows;
+
+/// <summary>Table <c>table_row</c>: the rows of every table as its latest version tells them. Derived: rebuilt from the versions in the archive.</summary>
+public sealed class RowTable
+{
+    private const string Columns = "scope, subject, key, kind, layout, person, date, since, content";
+
+    private const string Upsert = $"""
+        INSERT INTO table_row ({Columns})
+        VALUES (@Scope, @Subject, @Key, @Kind, @Layout, @Person, @Date, @Since, @Content)
+        ON CONFLICT (scope, kind, subject, key) DO UPDATE SET
+            layout = excluded.layout, person = excluded.person, date = excluded.date, since = excluded.since, content = excluded.content
+        """;
+
+    private const string Delete = "DELETE FROM table_row WHERE scope = @Scope AND kind = @Kind AND subject = @Subject AND key = @Key";
+    private const string SelectOfScope = $"SELECT {Columns} FROM table_row WHERE scope = @scope";
+    private const string SelectOfPerson = $"SELECT {Columns} FROM table_row WHERE person = @person AND kind = @kind";
+    private const string SelectOfKind = $"SELECT {Columns} FROM table_row WHERE kind = @kind";
+    private const string SelectOfNobody = $"SELECT {Columns} FROM table_row WHERE person IS NULL AND kind NOT IN ('plan', 'answers')";
+
+    private readonly StoreSession session;
+
+    internal RowTable(StoreSession session) => this.session = session;
+
+    /// <summary>Every row of a table, sorted by kind, date, subject and key.</summary>
+    public IReadOnlyList<StoredRow> OfScope(string scope) => Select(SelectOfScope, new { scope });
+
+    /// <summary>A person's rows of a kind in force: of equal keys told by several tables the one seen later. Sorted by date and key.</summary>
+    public IReadOnlyList<StoredRow> OfPerson(string person, RowKind kind) =>
+        InForce(Select(SelectOfPerson, new { person, kind = Words<RowKind>.Of(kind) }), row => row.Person);
+
+    /// <summary>Everybody's rows of a kind in force, of groups too; sorted by date, subject and key.</summary>
+    public IReadOnlyList<StoredRow> OfKind(RowKind kind) =>
+        InForce(Select(SelectOfKind, new { kind = Words<RowKind>.Of(kind) }), row => row.Person ?? $"?{row.Subject}");
+
+    /// <summary>Rows whose person is not in the roster; sorted as above.</summary>
+    public IReadOnlyList<StoredRow> OfNobody() => Select(SelectOfNobody, null);
+
+    /// <summary>Writes rows, each in place of the one of the same table, kind, subject and key.</summary>
+    public void Put(IEnumerable<StoredRow> rows) => session.ExecuteEach(Upsert, rows.Select(Row.From));
+
+    public void Remove(IEnumerable<StoredRow> rows) => session.ExecuteEach(Delete, rows.Select(Row.From));
+
+    private static List<StoredRow> InForce(List<StoredRow> rows, Func<StoredRow, string?> owner) =>
+    [
+        .. rows
+            .GroupBy(row => (Owner: owner(row), row.Key))
+            .Select(same => same.MaxBy(row => (row.Since, row.Scope), Later)!)
+            .OrderBy(row => row.Date)
+            .ThenBy(row => row.Subject, StringComparer.Ordinal)
+            .ThenBy(row => row.Key, StringComparer.Ordinal),
+    ];
+
+    private static Comparer<(Instant Since, string Scope)> Later { get; } = Comparer<(Instant Since, string Scope)>.Create((a, b) =>
+        a.Since.CompareTo(b.Since) is var apart and not 0 ? apart : string.CompareOrdinal(a.Scope, b.Scope));
+
+    private List<StoredRow> Select(string sql, object? values) =>
+    [
+        .. session.Rows<Row>(sql, values)
+            .Select(row => row.ToRow())
+            .OrderBy(row => row.Kind)
+            .ThenBy(row => row.Date)
+            .ThenBy(row => row.Subject, StringComparer.Ordinal)
+            .ThenBy(row => row.Key, StringComparer.Ordinal),
+    ];
+
+    private sealed class Row
+    {
+        public string Scope { get; init; } = "";
+
+        public string Subject { get; init; } = "";
+
+        public string Key { get; init; } = "";
+
+        public string Kind { get; init; } = "";
+
+        public string Layout { get; init; } = "";
+
+        public string? Person { get; init; }
+
+        public LocalDate Date { get; init; }
+
+        public Instant Since { get; init; }
+
+        public string Content { get; init; } = "";
+
+        public static Row From(StoredRow row) => new()
+        {
+            Scope = row.Scope,
+            Subject = row.Subject,
+            Key = row.Key,
+            Kind = Words<RowKind>.Of(row.Kind),
+            Layout = row.Layout,
+            Person = row.Person,
+            Date = row.Date,
+            Since = row.Since,
+            Content = RowText.Write(row.Content),
+        };
+
+        public StoredRow ToRow()
+        {
+            var kind = Words<RowKind>.Parse(Kind);
+            return new StoredRow(Scope, kind, Layout, Subject, Person, Date, Key, Since, RowText.Read(kind, Content));
+        }
+    }
+}
