@@ -8,9 +8,8 @@ namespace LoadWatch.Activities;
 /// </summary>
 internal static class DrillTotals
 {
-    private static readonly string[] Largest = ["_top", "_max"];
     private static readonly string[] Apart = ["_share", "_mean", "_per_minute", RatedLoad.Rating];
-    private static readonly string[] UnitsOfNoAmount = ["%", "bpm", "m/s", "m/s2", "m/min", "W", "W/kg"];
+    private static readonly string[] UnitsOfNoAmount = ["1", "%", "bpm", "m/s", "m/s2", "m/min", "W", "W/kg"];
 
     /// <summary>Null where the drills cannot be put together.</summary>
     /// <param name="drills">Of one name, at least one, finite.</param>
@@ -28,13 +27,20 @@ internal static class DrillTotals
 
     private static double? Value(Quantity kind, List<Quantity> values)
     {
-        if (EndsWithAny(kind.Name, Largest))
+        if (IsLargest(kind))
         {
             return values.Max(one => one.Value);
         }
 
-        return EndsWithAny(kind.Name, Apart) || UnitsOfNoAmount.Contains(kind.Unit, StringComparer.Ordinal) ? null : values.Sum(one => one.Value);
+        return IsApart(kind) ? null : values.Sum(one => one.Value);
     }
 
-    private static bool EndsWithAny(string name, string[] endings) => Array.Exists(endings, ending => name.EndsWith(ending, StringComparison.Ordinal));
+    /// <summary>A distance above a share of <c>speed_max</c> is an amount in spite of its name.</summary>
+    private static bool IsLargest(Quantity kind) =>
+        kind.Name.EndsWith("_top", StringComparison.Ordinal) || (kind.Name.EndsWith("_max", StringComparison.Ordinal) && !IsAmount(kind));
+
+    private static bool IsApart(Quantity kind) =>
+        !IsAmount(kind) || Array.Exists(Apart, ending => kind.Name.EndsWith(ending, StringComparison.Ordinal));
+
+    private static bool IsAmount(Quantity kind) => !UnitsOfNoAmount.Contains(kind.Unit, StringComparer.Ordinal);
 }

@@ -8,8 +8,10 @@ namespace LoadWatch.Activities;
 /// </summary>
 internal static class RatedLoad
 {
-    /// <summary>Rating of effort of a whole session, 0 to 10 (1).</summary>
+    /// <summary>Rating of effort of a whole session, 0 to 10 points (points).</summary>
     public const string Rating = "rating";
+
+    public const string RatingUnit = "points";
 
     private const string Name = "foster_load";
 

@@ -8,16 +8,19 @@ namespace LoadWatch.Activities;
 
 /// <summary>
 /// Puts session rows together: rows of one table and date with the same number, else the same start, are one session, its drills among them. A row with
-/// neither is the first one. What the rows without a drill say counts for the session; drills tell the rest.
+/// neither is the first one; further ones of the kind, without a drill, are sessions of their own in the order of their keys. What the row without a drill
+/// says counts for the session; drills tell the rest.
 /// </summary>
 internal static class StatedSessions
 {
     public static IEnumerable<StatedSession> Of(IEnumerable<OwnedRow> rows) => rows
-        .OrderBy(row => row.Key, StringComparer.Ordinal)
+        .OrderBy(row => row.Key.Length)
+        .ThenBy(row => row.Key, StringComparer.Ordinal)
         .Where(row => row.Content is SessionRow)
         .Select(row => (row.Layout, row.Date, Row: (SessionRow)row.Content))
         .GroupBy(row => (row.Layout, row.Date, Mark: Mark(row.Row.Order, row.Row.Start)), row => row.Row)
-        .Select(session => OfSession(session.Key.Layout, session.Key.Date, session.Key.Mark, [.. session]));
+        .SelectMany(group => Parted([.. group]).Select((rows, at) =>
+            OfSession(group.Key.Layout, group.Key.Date, at == 0 ? group.Key.Mark : $"{group.Key.Mark}-{at + 1}", rows)));
 
     public static string Mark(int? order, LocalTime? start) => (order, start) switch
     {
@@ -25,6 +28,12 @@ internal static class StatedSessions
         (null, { } time) => LocalTimePattern.ExtendedIso.Format(time),
         _ => "1",
     };
+
+    private static IEnumerable<List<SessionRow>> Parted(List<SessionRow> rows)
+    {
+        var whole = rows.FindAll(row => row.Drill is null).OrderBy(row => row.Order is null).ToList();
+        return [[.. whole.Take(1), .. rows.Where(row => row.Drill is not null)], .. whole.Skip(1).Select(row => new List<SessionRow> { row })];
+    }
 
     private static StatedSession OfSession(string layout, LocalDate date, string mark, List<SessionRow> rows)
     {

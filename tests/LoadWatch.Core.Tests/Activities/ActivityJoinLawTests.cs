@@ -28,6 +28,7 @@ public class ActivityJoinLawTests
                 rating,
                 content < 0 ? null : (DeclaredContent)content,
                 Given.Date.PlusDays(day),
+                key: null,
                 rating % 2 == 0 ? [Distance(hour * 110.7)] : []));
 
     private static readonly Gen<OwnedRow> SetRows =

@@ -180,7 +180,7 @@ public class ActivityJoinTests
         var activity = Assert.Single(Join([Morning], Session("pods", rating: 6, quantities: Top(8)), Session("diary", rating: 7)).Activities);
 
         Assert.Equal((7, 8, 420), (activity["rating"], activity["speed_top"], activity["foster_load"]));
-        Assert.Equal(["rating: 7 by diary counts, pods says 6"], activity.Remarks);
+        Assert.Equal(["rating: 7 points by diary counts, pods says 6 points"], activity.Remarks);
         Assert.Equal(["diary", "pods"], activity.Tables);
     }
 
@@ -210,6 +210,20 @@ public class ActivityJoinTests
 
         Assert.Equal(2, result.Activities.Count);
         Assert.Contains("fits 2 sessions of that date that were not recorded", Assert.Single(result.Questions).Sentence, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void RowsOfATableWithoutNumberOrStartAreSessionsOfTheirOwn()
+    {
+        OwnedRow[] rows = [Session(rating: 8, minutes: 30, key: "n=10"), Session(rating: 5, minutes: 60, key: "n=2")];
+
+        Assert.Equal(
+            [("rows/2026-03-10/ratings/1", 300.0), ("rows/2026-03-10/ratings/1-2", 240.0)],
+            Join([], rows).Activities.Select(activity => (activity.Key, activity["foster_load"]!.Value)));
+        Assert.Equal([8.0, 5.0], Join([Morning], rows).Activities.Select(activity => activity["rating"]!.Value).OrderDescending());
+        Assert.Equal(2, Join([Morning], rows).Activities.Count);
+        Assert.Equal(2, Join([Morning, Evening], rows).Activities.Count);
+        Assert.Single(Join([Morning, Evening], rows).Questions);
     }
 
     [Fact]

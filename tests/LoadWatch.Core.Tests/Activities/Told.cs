@@ -38,10 +38,11 @@ internal static class Told
         double? rating = null,
         DeclaredContent? content = null,
         LocalDate? date = null,
+        string? key = null,
         params Quantity[] quantities) => new(
         layout,
         date ?? Given.Date,
-        $"{order} {start} {drill}",
+        key ?? $"{order} {start} {drill}",
         new SessionRow(order, start, sport, drill, minutes, rating, quantities, content));
 
     public static OwnedRow Set(

@@ -59,6 +59,21 @@ public class TrackingRowTests
         Assert.Equal(["distance", "minutes", "speed_top"], activity.Quantities.Select(quantity => quantity.Name));
     }
 
+    [Theory]
+    [InlineData("distance_above_80_percent_speed_max", "m", 7.0)]
+    [InlineData("accelerations", "count", 7.0)]
+    [InlineData("speed_max", "m/s", 4.0)]
+    [InlineData("power_top", "W", 4.0)]
+    [InlineData("speed_mean", "m/s", null)]
+    [InlineData("distance_per_minute", "m", null)]
+    [InlineData("speed_top_share", "1", null)]
+    public void AmountsAddUpTopsTakeTheLargestAndTheRestStaysUnknown(string name, string unit, double? value)
+    {
+        OwnedRow Drill(string drill, double told) => Session("pods", drill: drill, minutes: 10, quantities: new Quantity(name, told, unit, Estimated: false));
+
+        Assert.Equal(value, Assert.Single(Join([], Drill("a", 3), Drill("b", 4)).Activities)[name]);
+    }
+
     [Fact]
     public void TheRowOfTheWholeSessionWinsAndDrillsFillWhatItLacks()
     {
