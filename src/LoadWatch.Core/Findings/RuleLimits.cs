@@ -14,6 +14,18 @@ public sealed record RuleLimits
 
     /// <summary>Expected recordings did not come.</summary>
     public SilenceLimits Silence { get; init; } = new();
+
+    /// <summary>Too few heavy-or-fast days of a body region.</summary>
+    public StimulusLowLimits StimulusLow { get; init; } = new();
+
+    /// <summary>The best of the last weeks below the best before.</summary>
+    public FallingCapacityLimits FallingCapacity { get; init; } = new();
+
+    /// <summary>Recordings of too little quality.</summary>
+    public NotUsableLimits NotUsable { get; init; } = new();
+
+    /// <summary>Function tests beyond a published cut-off or down by more than their error.</summary>
+    public FunctionTestLimits FunctionTest { get; init; } = new();
 }
 
 /// <summary>Limits of the rule <c>load_ratio</c>: acute load well above the usual, uncoupled.</summary>
