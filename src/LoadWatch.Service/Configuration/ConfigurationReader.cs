@@ -6,12 +6,13 @@ using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
 using LoadWatch.Loads;
 using LoadWatch.People;
+using LoadWatch.Service.Arrivals;
 using LoadWatch.Stimulus;
 using NodaTime;
 
 namespace LoadWatch.Service.Configuration;
 
-/// <summary>Reads and checks <c>loadwatch.json</c>, the roster and the anchors before anything else is touched.</summary>
+/// <summary>Reads and checks <c>loadwatch.json</c>, the roster, the anchors and the devices before anything else is touched.</summary>
 public sealed class ConfigurationReader
 {
     private readonly string path;
@@ -54,6 +55,7 @@ public sealed class ConfigurationReader
         var roster = faults.Collect(() => RosterReader.Read(Resolve(file.Roster), file.Roster, groups.Keys.ToList(), zone));
         var people = (roster ?? []).ToDictionary(person => person.Id, StringComparer.OrdinalIgnoreCase);
         var anchors = faults.Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList()));
+        var devices = faults.Collect(() => roster is null || !HasDevices(file) ? DeviceBook.Empty : DevicesReader.Read(Resolve(file.Devices), file.Devices, people));
         var contacts = ContactsReader.Read(file, groups, roster is null ? null : people, zone, faults);
         var mail = new MailReader(Resolve, faults.Add).Read(file);
         faults.Stop();
@@ -78,6 +80,8 @@ public sealed class ConfigurationReader
             file.Intake.LargestFileMegabytes * 1024L * 1024L)
         {
             Mail = mail,
+            Devices = devices!,
+            Subjects = new Subjects(people, groups, devices!),
         };
     }
 
@@ -210,8 +214,12 @@ public sealed class ConfigurationReader
             Encoding.UTF8.GetString(json),
             TableFile.TextOf(Resolve(file.Roster), file.Roster),
             TableFile.TextOf(Resolve(file.Anchors), file.Anchors));
+        text += HasDevices(file) ? $"\n{TableFile.TextOf(Resolve(file.Devices), file.Devices)}" : "";
         return (Convert.ToHexStringLower(SHA256.HashData(Encoding.UTF8.GetBytes(text))), text);
     }
+
+    /// <summary>Only under its usual name may the file be missing: another name was written on purpose.</summary>
+    private bool HasDevices(LoadWatchFile file) => file.Devices != LoadWatchFile.DefaultDevices || File.Exists(Resolve(file.Devices));
 
     private string Resolve(string relative) => System.IO.Path.GetFullPath(System.IO.Path.Combine(folder, relative));
 

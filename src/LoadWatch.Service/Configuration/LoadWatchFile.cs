@@ -23,11 +23,16 @@ public sealed record LoadWatchFile
     /// <summary>Folder of the notice files, one per month.</summary>
     public string Notices { get; init; } = "notices";
 
-    /// <summary>Who is watched: a CSV with the columns person, name, group, birth_year, sex, time_zone.</summary>
+    /// <summary>Who is watched: a CSV with the columns person, name, group, birth_year, sex, time_zone, aliases, heart_rate_valid.</summary>
     public string Roster { get; init; } = "roster.csv";
 
     /// <summary>Personal reference values: a CSV with the columns person, date, anchor, value, unit, source, exercise.</summary>
     public string Anchors { get; init; } = "anchors.csv";
+
+    /// <summary>Devices that are handed out: a CSV with the columns serial, person, from, to, session. It may be missing.</summary>
+    public string Devices { get; init; } = DefaultDevices;
+
+    internal const string DefaultDevices = "devices.csv";
 
     /// <summary>IANA zone of people and contacts that name none; blank takes the zone of this machine.</summary>
     public string TimeZone { get; init; } = "";
@@ -70,6 +75,9 @@ public sealed record InboxEntry
 
     /// <summary>Whether files stay (<c>leave</c>) or go once their effects are durable (<c>move</c>).</summary>
     public TakeMode Take { get; init; } = TakeMode.Leave;
+
+    /// <summary>How file names tell whose a file is, where no folder does: {person} once, and * for any text, ? for one character; blank: not at all.</summary>
+    public string FilePattern { get; init; } = "";
 }
 
 public enum TakeMode
