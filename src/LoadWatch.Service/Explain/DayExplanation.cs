@@ -1,8 +1,10 @@
 using System.Globalization;
 using System.Text;
+using LoadWatch.Activities;
 using LoadWatch.Days;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
+using LoadWatch.Service.Pipeline;
 using LoadWatch.Stimulus;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Activities;
@@ -34,9 +36,10 @@ public static class DayExplanation
         text.AppendLine(CultureInfo.InvariantCulture, $"{known.Name}, {Words.Date(day.Date)}: {Words.Of(day.State)}{(day.StateSource is { } source ? $" ({source})" : "")}");
         AppendDecisions(text, session, known.Id, day.Date);
         AppendTrends(text, day, configuration.Groups[known.Group].LoadQuantity);
-        foreach (var activity in session.Activities.OfPerson(known.Id, day.Date, day.Date))
+        var recorded = session.Activities.OfPerson(known.Id, day.Date, day.Date).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
+        foreach (var activity in PersonTraining.Of(session, configuration, TableBasis.Of(configuration, session), known).Activities.Where(activity => activity.Date == day.Date))
         {
-            AppendActivity(text, activity);
+            AppendActivity(text, activity, recorded.GetValueOrDefault(activity.Key));
         }
 
         foreach (var finding in session.Findings.OfPerson(known.Id, day.Date, day.Date))
@@ -92,16 +95,17 @@ public static class DayExplanation
         }
     }
 
-    private static void AppendActivity(StringBuilder text, StoredActivity activity)
+    private static void AppendActivity(StringBuilder text, JoinedActivity activity, StoredActivity? recorded)
     {
         text.AppendLine();
-        text.AppendLine(CultureInfo.InvariantCulture, $"session {Words.Start(activity.Winner.Start.WithOffset(activity.Winner.LocalOffset))} {activity.Winner.Sport}, by {activity.Winner.Source}");
-        foreach (var quantity in activity.Values.Quantities)
+        var start = recorded is { Winner: { } winner } ? Words.Start(winner.Start.WithOffset(winner.LocalOffset)) : "of no recording";
+        text.AppendLine(CultureInfo.InvariantCulture, $"session {start} {activity.Sport}, by {string.Join(" and ", activity.Sources)}{(activity.AddsLoad ? "" : ", its load not added")}");
+        foreach (var quantity in activity.Quantities)
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"    {quantity.Name} = {quantity.Value:0.###} {quantity.Unit}{(quantity.Estimated ? " (estimated)" : "")}");
         }
 
-        foreach (var stimulus in activity.Values.Stimulus)
+        foreach (var stimulus in activity.Stimulus)
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"    {BodyRegions.Word(stimulus.Region)} from {stimulus.Channel}, grade {stimulus.Grade}: hard bouts {OfBand(stimulus.HardBouts)}, hard repetitions {OfBand(stimulus.HardRepetitions)}, seconds of the slow class {OfBand(stimulus.SlowSeconds)}, medium {OfBand(stimulus.MediumSeconds)}, largest {OfBand(stimulus.LargeSeconds)}");
             foreach (var missing in stimulus.NotSeen)
@@ -110,12 +114,15 @@ public static class DayExplanation
             }
         }
 
-        foreach (var remark in activity.Values.Remarks)
+        foreach (var remark in activity.Remarks)
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"    {remark}");
         }
 
-        text.AppendLine(CultureInfo.InvariantCulture, $"    recordings: {string.Join(", ", activity.RecordingKeys.Select(key => key[..12] + key[64..]))}");
+        if (recorded is not null)
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"    recordings: {string.Join(", ", recorded.RecordingKeys.Select(key => key[..12] + key[64..]))}");
+        }
     }
 
     private static void Line(StringBuilder text, string name, double? value) =>
