@@ -1,6 +1,7 @@
 using LoadWatch.Activities;
 using LoadWatch.Decoding;
 using LoadWatch.Recordings;
+using LoadWatch.Rows;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
@@ -38,7 +39,10 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
 
         var file = decoders.Decode(content.Bytes);
         var verdict = OfTheRoster(ArrivalVerdict.Of(file, claims, now));
-        return new DecodedArrival(content.Sha, file.Kind, verdict, verdict.Person is { } person ? Compute(content.Sha, file, person) : []);
+        return new DecodedArrival(content.Sha, file.Kind, verdict, verdict.Person is { } person ? Compute(content.Sha, file, person) : [])
+        {
+            Table = verdict.State == ArrivalState.Stored ? file.Table : null,
+        };
     }
 
     /// <summary>Folders only name people of the roster; one whom a decision names may have left it since.</summary>
@@ -52,6 +56,11 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     public ArrivalContent Read(Arrival arrival, string path) =>
         ArrivalContent.Expand(decoders, arrival.ObjectSha, path, archive.Read(arrival.ObjectSha)).FirstOrDefault(content => content.Sha == arrival.Sha)
         ?? throw new InvalidDataException($"the archive object {arrival.ObjectSha[..12]} no longer holds {arrival.Sha[..12]}");
+
+    /// <summary>What a stored table holds.</summary>
+    /// <exception cref="InvalidDataException">The archive does not hold it any more, or it is no table as layouts are now.</exception>
+    public DecodedTable ReadTable(Arrival arrival) =>
+        decoders.Decode(Read(arrival, "").Bytes).Table ?? throw new InvalidDataException($"{arrival.Sha[..12]} is no table");
 
     /// <summary>Computes the values of one recording of a stored arrival again.</summary>
     public ActivityValues Recompute(Arrival arrival, int part)

@@ -21,6 +21,7 @@ public sealed class Sweep
     private readonly Recovery recovery;
     private readonly MovedFiles moved;
     private readonly AssignedFiles assigned;
+    private readonly Tables tables;
     private readonly Briefs briefs;
     private readonly ArchiveReader reader;
 
@@ -38,6 +39,7 @@ public sealed class Sweep
         recovery = new Recovery(store, archive, reader, settlement, probe);
         moved = new MovedFiles(configuration, store, archive, reader, settlement, now);
         assigned = new AssignedFiles(configuration, store, archive, reader, settlement, Report);
+        tables = new Tables(configuration, store, decoder, Report);
         briefs = new Briefs(configuration, now, Report.Unreadable);
     }
 
@@ -57,6 +59,7 @@ public sealed class Sweep
         intake.TakeIn(Inboxes.Changed(configuration, store, Report), cancel);
         moved.TakeUp();
         assigned.TakeUp(cancel);
+        tables.TakeUp(cancel);
         Evaluate(cancel);
         Report.InAll = store.Read(session => session.Arrivals.CountByState());
         return Report;
@@ -79,6 +82,7 @@ public sealed class Sweep
             settlement.Settle(piece, force: true);
         }
 
+        tables.TakeUp(cancel);
         new DayUpdate(configuration, store, now, Report) { Through = through }.Run(cancel);
         store.Write(session => session.Derived.SetConfigHash(Basis));
         return Report;
