@@ -8,9 +8,14 @@ public static class ExerciseWord
     /// <summary>Lower case, every run of blanks, hyphens and underscores one underscore, none at the ends. Null for null and where nothing is left.</summary>
     public static string? Canonical(string? word)
     {
-        var text = new StringBuilder();
+        if (word is null)
+        {
+            return null;
+        }
+
+        var text = new StringBuilder(word.Length);
         var apart = false;
-        foreach (var letter in word ?? "")
+        foreach (var letter in word)
         {
             if (IsBetween(letter))
             {

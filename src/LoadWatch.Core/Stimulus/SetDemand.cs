@@ -14,7 +14,7 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
     /// <summary>What each repetition counts for, s; of a hold, the part of it that is read.</summary>
     public double SecondsEach { get; init; } = 1;
 
-    /// <summary>Whether the maximum of another machine or of the free exercise stood in.</summary>
+    /// <summary>Whether the maximum of the exercise alone stood in for that of the machine.</summary>
     public bool IsMaximumBorrowed { get; init; }
 
     /// <summary>

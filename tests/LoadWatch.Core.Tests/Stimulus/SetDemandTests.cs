@@ -1,4 +1,5 @@
 using System.Globalization;
+using CsCheck;
 using LoadWatch.People;
 using LoadWatch.Recordings;
 
@@ -185,6 +186,50 @@ public class SetDemandTests
         Assert.Equal(
             ["maximum on the machine of 1 of 1 sets: that of the exercise stands in"],
             Region(Given.Set("squat", 8, 50, 2) with { Machine = "Rack 2" }).NotSeen);
+
+    /// <summary>Whatever a log says, slips of writing too: drives are shares, in the order of the variants, and more hardness never asks for less.</summary>
+    [Fact]
+    public void DrivesAreOrderedSharesWhateverTheLogSays() =>
+        Gen.Select(AnySet, OneOf(Maxima.Split(' ')), Gen.Double[0, 9.5]).Sample((set, maximum, hardness) =>
+        {
+            Anchor[] anchors = maximum == "none" ? [] : [Anchor(maximum)];
+            var easier = Demand(set with { Hardness = hardness, RepetitionsInReserve = null }, anchors);
+            var harder = Demand(set with { Hardness = hardness + 0.5, RepetitionsInReserve = null }, anchors);
+            return IsOrdered(Demand(set, anchors)) && IsOrdered(easier) && IsOrdered(harder)
+                && (easier is null || easier.Drives(Variant.Mid).Sum() <= harder!.Drives(Variant.Mid).Sum() + 1e-9);
+        });
+
+    private static Gen<double?> AnyNumber { get; } = Gen.OneOf(
+        Gen.Double[0, 200].Select(number => (double?)number), OneOf<double?>(null, 0, -1, double.NaN, double.PositiveInfinity, 1e300));
+
+    private static Gen<StrengthSet> AnySet { get; } = Gen.Select(
+        Gen.Select(AnyNumber, AnyNumber, AnyNumber, AnyNumber),
+        Gen.OneOf(Gen.Int[-2, 60].Select(number => (int?)number), OneOf<int?>(null, int.MaxValue)),
+        Gen.Enum<SetLoad>(),
+        Gen.Bool,
+        Gen.Bool,
+        (numbers, repetitions, load, hold, fast) => Given.Set("squat", repetitions, numbers.Item1, numbers.Item2) with
+        {
+            DurationSeconds = numbers.Item3,
+            ConcentricSeconds = numbers.Item4,
+            Load = load,
+            IsHold = hold,
+            IsFast = fast,
+        });
+
+    private static Gen<T> OneOf<T>(params T[] values) => Gen.Int[0, values.Length - 1].Select(index => values[index]);
+
+    private static bool IsOrdered(SetDemand? demand)
+    {
+        if (demand is null)
+        {
+            return true;
+        }
+
+        var (low, mid, high) = (demand.Drives(Variant.Low).ToList(), demand.Drives(Variant.Mid).ToList(), demand.Drives(Variant.High).ToList());
+        return Enumerable.Range(0, mid.Count).All(index => low[index] >= 0 && low[index] <= mid[index] && mid[index] <= high[index] && high[index] <= 1)
+            && demand.SecondsEach > 0;
+    }
 
     private static StrengthSet Hold(double seconds, double hardness) =>
         Given.Set("wall_sit", null, null) with { IsHold = true, DurationSeconds = seconds, Hardness = hardness };
