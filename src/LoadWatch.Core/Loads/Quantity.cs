@@ -36,6 +36,12 @@ public static class QuantityNames
     /// <summary>Highest speed held for 1 s, metres per second (m/s). No load: a day's sum of it would mean nothing.</summary>
     public const string SpeedTop = "speed_top";
 
+    /// <summary>Highest power held for 1 s, watts (W), not on foot. No load.</summary>
+    public const string PowerTop = "power_top";
+
+    /// <summary>Begins the name of an estimated one-repetition maximum, kilograms (kg); exercise and machine follow. No load.</summary>
+    public const string OneRepetitionMaxOf = "one_repetition_max_of_";
+
     /// <summary>Mechanical work, kilojoules (kJ).</summary>
     public const string Work = "work";
 
