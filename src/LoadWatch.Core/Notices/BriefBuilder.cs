@@ -51,7 +51,15 @@ public static class BriefBuilder
     internal static bool ToLookAt(BriefSubject subject) =>
         subject.Alerts.Any(news => IsActive(news) && (news.IsNew || news.Alert.State == AlertState.Unacknowledged));
 
-    private static List<BriefSubject> Shown(Contact contact, IReadOnlyList<BriefSubject> subjects) =>
+    /// <summary>The contact's people, each with the alerts that may be told to a reader of this role.</summary>
+    private static List<BriefSubject> Shown(Contact contact, IReadOnlyList<BriefSubject> subjects)
+    {
+        var people = PeopleOf(contact, subjects);
+        var view = RoleView.Of(contact.Role, people.Count);
+        return [.. people.Select(subject => subject with { Alerts = [.. subject.Alerts.Where(news => view.ShowsRule(news.Alert.Key.Rule))] })];
+    }
+
+    private static List<BriefSubject> PeopleOf(Contact contact, IReadOnlyList<BriefSubject> subjects) =>
     [
         .. subjects
             .Where(subject => contact.People.Count > 0

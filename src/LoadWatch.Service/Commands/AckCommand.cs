@@ -1,5 +1,6 @@
 using System.CommandLine;
 using LoadWatch.Alerts;
+using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Explain;
 using LoadWatch.Service.Export;
@@ -60,7 +61,7 @@ public static class AckCommand
         session.Alerts.Put(changed);
         session.Alerts.Changes.Append(change);
         session.Audits.Add("acknowledged", alertId, circumstances.Now);
-        return $"Acknowledged: {alert.Text}";
+        return $"Acknowledged: {OneLine.Of(alert.Text)}";
     }
 
     private static string AlreadySaid(Alert alert, IReadOnlyList<Decision> decisions) =>

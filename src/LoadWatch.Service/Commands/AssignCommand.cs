@@ -1,4 +1,5 @@
 using System.CommandLine;
+using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Explain;
@@ -55,7 +56,7 @@ public static class AssignCommand
             [] => $"\"{word}\" is no file known here",
             [{ Kind: "gzip" or "zip" } archive] => $"{Name(session, archive)} is an archive; assign the files in it: {Members(session, archive)}",
             [{ State: ArrivalState.Aside or ArrivalState.Refused } useless] =>
-                $"{Name(session, useless)} has nothing to assign; it is {Words.Of(useless.State)}: {useless.Reason}",
+                $"{Name(session, useless)} has nothing to assign; it is {Words.Of(useless.State)}: {OneLine.Of(useless.Reason ?? "")}",
             [_] => null,
             _ => $"\"{word}\" is more than one file; name one by its digits: {Names(session, found)}",
         };
@@ -71,7 +72,7 @@ public static class AssignCommand
 
         session.Decisions.Add(new Decision(DecisionKind.Assign, arrival.Sha, person, circumstances.Now, circumstances.By, circumstances.Note));
         session.Audits.Add("assigned", $"{arrival.Sha[..12]} to {person}", circumstances.Now);
-        var held = arrival.State == ArrivalState.Held ? $" Until then it is held: {arrival.Reason}." : "";
+        var held = arrival.State == ArrivalState.Held ? $" Until then it is held: {OneLine.Of(arrival.Reason ?? "")}." : "";
         return $"{name} is assigned to {person}; taken up by the next sweep.{held}";
     }
 
@@ -85,5 +86,5 @@ public static class AssignCommand
     }
 
     private static string Name(StoreSession session, Arrival arrival) =>
-        session.Sightings.Of(arrival.Sha) is [var first, ..] ? $"{arrival.Sha[..12]} ({first.Path})" : arrival.Sha[..12];
+        session.Sightings.Of(arrival.Sha) is [var first, ..] ? $"{arrival.Sha[..12]} ({OneLine.Of(first.Path)})" : arrival.Sha[..12];
 }

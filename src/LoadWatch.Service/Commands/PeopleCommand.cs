@@ -1,6 +1,6 @@
 using System.CommandLine;
-using System.Text.Json;
 using LoadWatch.Days;
+using LoadWatch.Notices;
 using LoadWatch.People;
 using LoadWatch.Service.Export;
 using LoadWatch.Stimulus;
@@ -29,7 +29,7 @@ public static class PeopleCommand
             .ToList());
         if (json)
         {
-            Console.Out.WriteLine(JsonSerializer.Serialize(lines, Words.Json));
+            Console.Out.WriteLine(Words.Line(lines));
         }
         else
         {
@@ -57,7 +57,7 @@ public static class PeopleCommand
         {
             table.AddRow(
                 Markup.Escape(line.Person),
-                Markup.Escape(line.Name),
+                Markup.Escape(OneLine.Of(line.Name)),
                 Markup.Escape(line.Group),
                 line.LastRecorded ?? "none",
                 line.WeekLoad is { } load ? FormattableString.Invariant($"{load:0}") : "?",

@@ -1,6 +1,7 @@
 using System.Globalization;
 using System.Text;
 using LoadWatch.Days;
+using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
 using LoadWatch.Stimulus;
@@ -24,11 +25,11 @@ public static class DayExplanation
         var day = date is { } wanted ? session.Days.OfPerson(known.Id, wanted, wanted).FirstOrDefault() : LastDay.Of(session, known.Id);
         if (day is null)
         {
-            return $"{known.Name}: nothing is computed for {(date is { } missing ? Words.Date(missing) : "any day yet")}.";
+            return $"{OneLine.Of(known.Name)}: nothing is computed for {(date is { } missing ? Words.Date(missing) : "any day yet")}.";
         }
 
         var text = new StringBuilder();
-        text.AppendLine(CultureInfo.InvariantCulture, $"{known.Name}, {Words.Date(day.Date)}: {Words.Of(day.State)}{(day.StateSource is { } source ? $" ({source})" : "")}");
+        text.AppendLine(CultureInfo.InvariantCulture, $"{OneLine.Of(known.Name)}, {Words.Date(day.Date)}: {Words.Of(day.State)}{(day.StateSource is { } source ? $" ({source})" : "")}");
         AppendTrends(text, day, configuration.Groups[known.Group].LoadQuantity);
         foreach (var activity in session.Activities.OfPerson(known.Id, day.Date, day.Date))
         {
@@ -38,7 +39,7 @@ public static class DayExplanation
         foreach (var finding in session.Findings.OfPerson(known.Id, day.Date, day.Date))
         {
             text.AppendLine();
-            text.AppendLine(CultureInfo.InvariantCulture, $"finding {finding.Rule}: {finding.Text}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"finding {finding.Rule}: {OneLine.Of(finding.Text)}");
             AlertExplanation.Append(text, finding.Evidence);
         }
 
@@ -69,7 +70,7 @@ public static class DayExplanation
     private static void AppendActivity(StringBuilder text, StoredActivity activity)
     {
         text.AppendLine();
-        text.AppendLine(CultureInfo.InvariantCulture, $"session {Words.Start(activity.Winner.Start.WithOffset(activity.Winner.LocalOffset))} {activity.Winner.Sport}, by {activity.Winner.Source}");
+        text.AppendLine(CultureInfo.InvariantCulture, $"session {Words.Start(activity.Winner.Start.WithOffset(activity.Winner.LocalOffset))} {OneLine.Of(activity.Winner.Sport.ToString())}, by {OneLine.Of(activity.Winner.Source)}");
         foreach (var quantity in activity.Values.Quantities)
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"    {quantity.Name} = {quantity.Value:0.###} {quantity.Unit}{(quantity.Estimated ? " (estimated)" : "")}");
@@ -80,13 +81,13 @@ public static class DayExplanation
             text.AppendLine(CultureInfo.InvariantCulture, $"    {BodyRegions.Word(stimulus.Region)} from {stimulus.Channel}, grade {stimulus.Grade}: hard bouts {OfBand(stimulus.HardBouts)}, hard repetitions {OfBand(stimulus.HardRepetitions)}, seconds of the slow class {OfBand(stimulus.SlowSeconds)}, medium {OfBand(stimulus.MediumSeconds)}, largest {OfBand(stimulus.LargeSeconds)}");
             foreach (var missing in stimulus.NotSeen)
             {
-                text.AppendLine(CultureInfo.InvariantCulture, $"        not seen: {missing}");
+                text.AppendLine(CultureInfo.InvariantCulture, $"        not seen: {OneLine.Of(missing)}");
             }
         }
 
         foreach (var remark in activity.Values.Remarks)
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    {remark}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {OneLine.Of(remark)}");
         }
 
         text.AppendLine(CultureInfo.InvariantCulture, $"    recordings: {string.Join(", ", activity.RecordingKeys.Select(key => key[..12] + key[64..]))}");
