@@ -44,8 +44,13 @@ public static class BriefBuilder
         .ThenBy(news => RuleTexts.Order(news.Alert.Key.Rule))
         .ThenBy(news => news.Alert.Id, StringComparer.Ordinal);
 
-    /// <summary>The name to show: the person's own, or "You".</summary>
-    internal static string NameOf(Person person, bool self) => self ? "You" : OneLine.Of(person.Name);
+    /// <summary>The name to show: the person's own, or "You"; the id for a name of which nothing can be shown.</summary>
+    internal static string NameOf(Person person, bool self) => (self, OneLine.Of(person.Name)) switch
+    {
+        (true, _) => "You",
+        (_, "") => person.Id,
+        (_, var name) => name,
+    };
 
     /// <summary>An acknowledged alert asks for nothing more; it stays beside one that does, and in the group's table.</summary>
     internal static bool ToLookAt(BriefSubject subject) =>

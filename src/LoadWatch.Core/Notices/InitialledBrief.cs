@@ -18,7 +18,7 @@ internal sealed class InitialledBrief
         // Everybody of the brief stands in one of its tables.
         var shown = brief.Groups.SelectMany(group => group.Rows).Select(row => row.PersonId).ToHashSet(StringComparer.OrdinalIgnoreCase);
         this.brief = brief;
-        names = people.ToDictionary(person => person.Id, person => OneLine.Of(person.Name), StringComparer.OrdinalIgnoreCase);
+        names = people.ToDictionary(person => person.Id, person => BriefBuilder.NameOf(person, self: false), StringComparer.OrdinalIgnoreCase);
         labels = Initials.Of(people.Where(person => shown.Contains(person.Id)));
         cover = new NameCover(people, labels);
     }

@@ -6,7 +6,7 @@ namespace LoadWatch.Notices;
 
 /// <summary>
 /// Puts initials where a text names somebody: whole words only, the longest match first. Names and ids are found in any case; in the names of files also
-/// ids that are numbers, single parts of names and names run together.
+/// ids that are mere numbers or letters, single parts of names and names run together.
 /// </summary>
 internal sealed class NameCover
 {
@@ -34,8 +34,8 @@ internal sealed class NameCover
         /// <summary>A name or an id.</summary>
         Whole,
 
-        /// <summary>An id that is a number: in a sentence it cannot be told from other numbers.</summary>
-        Number,
+        /// <summary>An id of digits or of one letter: in a sentence it cannot be told from what else is written so.</summary>
+        Unclear,
 
         /// <summary>One word of a name: in a sentence it counts only as it is written.</summary>
         Part,
@@ -62,7 +62,7 @@ internal sealed class NameCover
         var name = Composed(OneLine.Of(person.Name));
         var parts = Parts(name);
         yield return new(Trimmed(name), label ?? Outsider, Kind.Whole);
-        yield return new(Trimmed(Composed(person.Id)), label ?? Outsider, person.Id.All(char.IsDigit) ? Kind.Number : Kind.Whole);
+        yield return new(Trimmed(Composed(person.Id)), label ?? Outsider, IsUnclear(person.Id) ? Kind.Unclear : Kind.Whole);
         if (parts.Count > 1)
         {
             yield return new(string.Concat(parts), label ?? Outsider, Kind.Whole);
@@ -74,6 +74,8 @@ internal sealed class NameCover
             yield return new(part, Initials.Of(part), Kind.Part);
         }
     }
+
+    private static bool IsUnclear(string id) => id.Length == 1 || id.All(char.IsDigit);
 
     /// <summary>Where one text stands for several people, the initials stand without the number.</summary>
     private static Covered Merge(IEnumerable<Covered> same)
@@ -93,7 +95,7 @@ internal sealed class NameCover
             if (BeginsWord(from, at) && Found(from, at, where) is { } found)
             {
                 at += found.Text.Length;
-                to.Append(at < from.Length && from[at] == '.' ? found.Cover.TrimEnd('.') : found.Cover);
+                to.Append(at < from.Length ? Before(from[at], found.Cover) : found.Cover);
             }
             else
             {
@@ -104,6 +106,14 @@ internal sealed class NameCover
         return to.ToString();
     }
 
+    /// <summary>No full stop is doubled, and no number grown.</summary>
+    private static string Before(char next, string cover) => next switch
+    {
+        '.' => cover.TrimEnd('.'),
+        _ when char.IsDigit(next) && char.IsDigit(cover[^1]) => cover + " ",
+        _ => cover,
+    };
+
     private Covered? Found(string text, int at, Where where) =>
         byFirstWord.GetValueOrDefault(text[at..WordEnd(text, at)])?.Find(word => Counts(word, text, at, where) && EndsWord(text, at + word.Text.Length));
 
@@ -112,7 +122,7 @@ internal sealed class NameCover
         var counts = word.Kind switch
         {
             Kind.Whole => true,
-            Kind.Number => where == Where.File,
+            Kind.Unclear => where == Where.File,
             _ => where != Where.Sentence,
         };
         var comparison = word.Kind == Kind.Part && where != Where.File ? StringComparison.Ordinal : StringComparison.OrdinalIgnoreCase;
