@@ -1,4 +1,3 @@
-using System.Text.Json;
 using LoadWatch.Activities;
 using LoadWatch.Alerts;
 using LoadWatch.Days;
@@ -33,7 +32,7 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
     {
         foreach (var line in lines)
         {
-            output.Write(JsonSerializer.Serialize(line, line.GetType(), Words.Json));
+            output.Write(Words.Line(line));
             output.Write('\n');
         }
     }
