@@ -60,7 +60,7 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
         var through = ThroughOf(person);
         var activities = store.Read(session => session.Activities.OfPerson(person.Id)).Select(activity => OnDay(activity, group)).ToList();
         var days = LoadCalendar.Build(person.Id, activities, through);
-        var findings = RuleBook.Evaluate(new RuleSubject(person, days, group.Limits) { LoadUnit = LoadUnits.Of(group.LoadQuantity) });
+        var findings = RuleBook.Evaluate(new RuleSubject(person, days, group.Limits) { LoadUnit = LoadUnits.Of(group.LoadQuantity), LoadQuantity = group.LoadQuantity });
         return new ComputedSeries(
             person.Id,
             from,
