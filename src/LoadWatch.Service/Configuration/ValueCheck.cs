@@ -25,6 +25,7 @@ public static class ValueCheck
         { Kind: JsonTypeInfoKind.Object or JsonTypeInfoKind.Dictionary } => (element.ValueKind == JsonValueKind.Object, "an object in braces"),
         { Kind: JsonTypeInfoKind.Enumerable } => (element.ValueKind == JsonValueKind.Array, "a list in brackets"),
         { Type.IsEnum: true } => (IsOneOf(element, WordsOf(type.Type)), $"one of {string.Join(", ", WordsOf(type.Type))}"),
+        _ when type.Type == typeof(bool) => (element.ValueKind is JsonValueKind.True or JsonValueKind.False, "true or false"),
         _ when type.Type == typeof(int) => (element.ValueKind == JsonValueKind.Number && element.TryGetInt32(out _), "a whole number"),
         _ when type.Type == typeof(double) => (IsFinite(element), "a number"),
         _ when type.Type == typeof(char) => (element.ValueKind == JsonValueKind.String && element.GetString()!.Length == 1, "one character in quotes"),

@@ -49,6 +49,19 @@ public sealed class ConfigurationReaderTests
     }
 
     [Fact]
+    public void AGroupTurnsRulesOffAndNamesQuantities()
+    {
+        var read = ConfigurationFolder.With("loadwatch.json", """
+            { "limits": { "load_ratio": { "quantities": ["distance"] } },
+              "groups": [ { "id": "squad", "limits": { "hard_days": { "enabled": false }, "falling_load": { "quantities": ["sprints_of_pods", "climb"] } } } ] }
+            """);
+
+        var limits = read.Groups["squad"].Limits;
+        Assert.Equal((false, true), (limits.HardDays.Enabled, limits.Monotony.Enabled));
+        Assert.Equal(["climb", "distance", "sprints_of_pods"], limits.Quantities);
+    }
+
+    [Fact]
     public void AnOwnRegionReplacesTheShippedOneAndTheOthersStay()
     {
         var read = ConfigurationFolder.With("loadwatch.json", """{ "computation": { "exercises": { "squat": ["legs", "trunk"], "step_up": ["legs"] } } }""");
