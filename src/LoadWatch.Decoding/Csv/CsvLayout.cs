@@ -61,7 +61,7 @@ public sealed record CsvLayout
     /// </summary>
     public string Encoding { get; init; } = CsvText.Auto;
 
-    /// <summary>Where the time of a row stands. No default. Of a table: instead of <see cref="DateColumn"/>, its date counts.</summary>
+    /// <summary>Where the time of a row stands. No default. Of a table: where the date stands in a moment.</summary>
     public CsvTimeColumn Time { get; init; } = new();
 
     /// <summary>The columns that hold readings. One that is not in <see cref="Header"/> may be absent from a file. No default.</summary>

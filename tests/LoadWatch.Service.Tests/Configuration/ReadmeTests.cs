@@ -54,7 +54,7 @@ public sealed class ReadmeTests
     [Fact]
     public void EveryKeyOfTheConfigurationIsNamed()
     {
-        var missing = new[] { typeof(InboxEntry), typeof(GroupEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(CsvLayout) }
+        var missing = new[] { typeof(InboxEntry), typeof(GroupEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(CsvLayout), typeof(CsvField), typeof(CsvWideEntry) }
             .SelectMany(type => type.GetProperties())
             .Concat(typeof(LoadWatchFile).GetProperties().Where(property => property.Name != nameof(LoadWatchFile.Schema)))
             .Select(KeyOf)

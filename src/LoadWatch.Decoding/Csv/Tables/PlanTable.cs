@@ -28,8 +28,6 @@ internal sealed class PlanTable : TableKind
 
     public override bool TakesEverybody => true;
 
-    public override string TimeField => "start";
-
     public override RowMade Make(LocalDate date, RowValues values) => (values.Word<PlanWord>("plan"), values.Date("until")) switch
     {
         (null, _) => RowMade.Wrong("plan", "no word for what is planned"),

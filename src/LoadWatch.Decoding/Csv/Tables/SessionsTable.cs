@@ -27,8 +27,6 @@ internal sealed class SessionsTable : TableKind
 
     public override bool CoversEverything => false;
 
-    public override string TimeField => "start";
-
     public override RowMade Make(LocalDate date, RowValues values) => RowMade.Of(new SessionRow(
         values.Whole("order"),
         values.Time("start"),

@@ -33,8 +33,6 @@ internal sealed class SetsTable : TableKind
 
     public override bool CoversEverything => false;
 
-    public override string TimeField => "time";
-
     public override RowMade Make(LocalDate date, RowValues values)
     {
         var kilograms = values.Number("kilograms");

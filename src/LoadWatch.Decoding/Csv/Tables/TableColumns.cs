@@ -11,6 +11,18 @@ internal static class TableColumns
     public static IEnumerable<string?> Named(CsvLayout layout) =>
         [.. Fields(layout).Select(field => field.Column), Date(layout), layout.PersonColumn, layout.GroupColumn];
 
+    /// <summary>The same; a column of moments may state the date and a time of day.</summary>
+    public static IEnumerable<string?> NamedForOneThing(CsvLayout layout) =>
+    [
+        .. Fields(layout).Where(field => !IsTimeOfMoment(layout, field)).Select(field => field.Column),
+        Date(layout),
+        layout.PersonColumn,
+        layout.GroupColumn,
+    ];
+
+    private static bool IsTimeOfMoment(CsvLayout layout, CsvField field) =>
+        MomentNotation.IsColumn(layout, field.Column) && TableKind.Of(layout.Kind).Role(field.Field) is TimeRole;
+
     /// <summary>Whether the table has what it takes to be read by the layout.</summary>
     public static bool Fit(CsvLayout layout, CsvTable table) =>
         layout.Header.All(table.Has)

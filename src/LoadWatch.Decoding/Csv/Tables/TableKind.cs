@@ -26,9 +26,6 @@ internal abstract class TableKind
     /// <summary>Whether a row that names nobody is about everybody.</summary>
     public virtual bool TakesEverybody => false;
 
-    /// <summary>The field that the time of day fills where the date is read from a time; null for none.</summary>
-    public virtual string? TimeField => null;
-
     public static TableKind Of(CsvKind kind) => kind switch
     {
         CsvKind.Sessions => SessionsTable.Kind,

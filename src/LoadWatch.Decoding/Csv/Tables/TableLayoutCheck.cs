@@ -79,7 +79,7 @@ internal static class TableLayoutCheck
     }
 
     private static IEnumerable<string> SharedColumns(CsvLayout layout) =>
-        TableColumns.Named(layout)
+        TableColumns.NamedForOneThing(layout)
             .Where(name => !string.IsNullOrWhiteSpace(name))
             .GroupBy(name => name, StringComparer.Ordinal)
             .Where(same => same.Count() > 1)

@@ -103,7 +103,7 @@ internal sealed class TableReading
             return null;
         }
 
-        var date = dates.Read(rows, out var time, out var problem);
+        var date = dates.Read(rows, out var problem);
         if (date is null || (problem = Take(rows, shared)) is not null)
         {
             return problem;
@@ -111,7 +111,7 @@ internal sealed class TableReading
 
         foreach (var place in filled)
         {
-            if (ReadPlace(rows, place, date.Value, time) is { } wrong)
+            if (ReadPlace(rows, place, date.Value) is { } wrong)
             {
                 problems.AddBad(wrong, filled.Count == 1 ? rows.LineSpan : 1);
             }
@@ -120,10 +120,9 @@ internal sealed class TableReading
         return null;
     }
 
-    private Problem? ReadPlace(CsvRows rows, RowPlace place, LocalDate date, LocalTime? time)
+    private Problem? ReadPlace(CsvRows rows, RowPlace place, LocalDate date)
     {
         values.Clear();
-        SetTime(time);
         foreach (var (field, value) in place.Constants)
         {
             values.Set(field, value);
@@ -139,15 +138,6 @@ internal sealed class TableReading
         return made.Content is { } content
             ? Add(rows, new TableRow(subject is null ? null : pool.Same(subject), date, "", content, rows.Line))
             : Wrong(rows, place, made.Field!, made.Reason!);
-    }
-
-    /// <summary>A field of the table goes before the time of its date column.</summary>
-    private void SetTime(LocalTime? time)
-    {
-        if (time is { } known && kind.TimeField is { } field)
-        {
-            values.Set(field, known);
-        }
     }
 
     /// <returns>The first cell that says nothing usable, or null.</returns>

@@ -3,7 +3,7 @@ using NodaTime.Text;
 
 namespace LoadWatch.Decoding.Csv.Tables;
 
-/// <summary>A local time of day.</summary>
+/// <summary>A local time of day; in the column of moments that the dates are taken from, the time of the moment.</summary>
 internal sealed record TimeRole(string Name) : FieldRole(Name)
 {
     private static readonly LocalTimePattern[] Usual =
@@ -13,22 +13,31 @@ internal sealed record TimeRole(string Name) : FieldRole(Name)
         ? $"format {reason}"
         : base.Complaint(field with { Format = null });
 
-    public override CellReading Reading(CsvField field, CsvLayout layout)
+    public override CellReading Reading(CsvField field, CsvLayout layout) => field.Format switch
     {
-        var patterns = field.Format is { } format ? [LocalTimePattern.CreateWithInvariantCulture(format)] : Usual;
-        return text =>
-        {
-            foreach (var pattern in patterns)
-            {
-                if (pattern.Parse(text).TryGetValue(default, out var time))
-                {
-                    return CellValue.Of(time);
-                }
-            }
+        null when MomentNotation.IsColumn(layout, field.Column) => OfMoments(layout),
+        null => OfPatterns(Usual, "not a time of day such as 17:30"),
+        var format => OfPatterns([LocalTimePattern.CreateWithInvariantCulture(format)], "not a time of day as the layout writes it"),
+    };
 
-            return CellValue.Wrong(field.Format is null ? "not a time of day such as 17:30" : "not a time of day as the layout writes it");
-        };
+    private static CellReading OfMoments(CsvLayout layout)
+    {
+        var moments = new MomentNotation(layout);
+        return text => moments.Read(text) is { } local ? CellValue.Of(local.TimeOfDay) : CellValue.Wrong("not a time as the layout writes it");
     }
+
+    private static CellReading OfPatterns(LocalTimePattern[] patterns, string complaint) => text =>
+    {
+        foreach (var pattern in patterns)
+        {
+            if (pattern.Parse(text).TryGetValue(default, out var time))
+            {
+                return CellValue.Of(time);
+            }
+        }
+
+        return CellValue.Wrong(complaint);
+    };
 
     /// <summary>Writes a time of an afternoon and reads it again: a pattern without the half of the day does not give it back.</summary>
     private static string? PatternComplaint(string format)

@@ -260,20 +260,22 @@ public class TableKindTests
     }
 
     [Fact]
-    public void TheDateMayComeFromAMomentAndTheTimeWithIt()
+    public void TheDateMayComeFromAMomentAndTheTimeWhereAFieldSaysSo()
     {
-        var layout = Layout(CsvKind.Sets, TableFiles.Field("x", "exercise")) with
+        var layout = Layout(CsvKind.Sets, TableFiles.Field("x", "exercise"), TableFiles.Field("t", "time")) with
         {
             DateColumn = null,
             Header = ["t"],
             Time = new CsvTimeColumn { Column = "t", Zone = "Europe/Helsinki" },
         };
 
-        var rows = TableFiles.Rows("t,x\n2026-10-05T23:30:00Z,squat\n2026-10-05T23:30:00+02:00,squat\n2026-10-05T23:30:00,squat\n", layout);
+        const string Text = "t,x\n2026-10-05T23:30:00Z,squat\n2026-10-05T23:30:00+02:00,squat\n2026-10-05T23:30:00,squat\n";
+        var rows = TableFiles.Rows(Text, layout);
 
         // 23:30 UTC is 02:30 of the next day in Helsinki (summer time, +03); a written offset and a local time stay as they are.
         Assert.Equal([Date.PlusDays(1), Date, Date], rows.Select(row => row.Date));
         Assert.Equal([new LocalTime(2, 30), new(23, 30), new(23, 30)], rows.Select(row => ((SetRow)row.Content).Time));
+        Assert.All(TableFiles.Contents<SetRow>(Text, layout with { Fields = [layout.Fields[0]] }), set => Assert.Null(set.Time));
     }
 
     [Theory]
