@@ -1,3 +1,4 @@
+using LoadWatch.Plans;
 using NodaTime;
 
 namespace LoadWatch.Days;
@@ -8,10 +9,10 @@ internal static class CalendarDates
     /// <summary>A recording speaks for its source's empty days up to this many days before it, back to the source's last recording. Days.</summary>
     private const int SettledDaysBack = 7;
 
-    public static IEnumerable<CalendarDate> Lay(IReadOnlyList<ActivityOnDay> activities, LocalDate through)
+    public static IEnumerable<CalendarDate> Lay(IReadOnlyList<ActivityOnDay> activities, LocalDate through, PersonPlan plan)
     {
         var counted = activities.Where(activity => activity.Date <= through).ToList();
-        return counted.Count == 0 ? [] : Settle(counted.Min(activity => activity.Date), ByDate(counted, through));
+        return counted.Count == 0 ? [] : Settle(counted.Min(activity => activity.Date), ByDate(counted, through), plan);
     }
 
     private static List<ActivityOnDay>[] ByDate(List<ActivityOnDay> activities, LocalDate through)
@@ -31,22 +32,24 @@ internal static class CalendarDates
         return dates;
     }
 
-    private static IEnumerable<CalendarDate> Settle(LocalDate first, List<ActivityOnDay>[] dates)
+    private static IEnumerable<CalendarDate> Settle(LocalDate first, List<ActivityOnDay>[] dates, PersonPlan plan)
     {
         var witnesses = Witnesses(dates);
         var recorded = 0;
         for (var index = 0; index < dates.Length; index++)
         {
             recorded = dates[index].Count > 0 ? index : recorded;
-            var (state, source) = State(dates[index].Count > 0, witnesses[index]);
-            yield return new CalendarDate(first.PlusDays(index), index, state, source, index - recorded, dates[index]);
+            var planned = plan.On(first.PlusDays(index));
+            var (state, source) = State(dates[index].Count > 0, planned.RestStatedBy, witnesses[index]);
+            yield return new CalendarDate(first.PlusDays(index), index, state, source, index - recorded, dates[index], planned);
         }
     }
 
-    private static (DayState State, string? Source) State(bool recorded, string? witness) => (recorded, witness) switch
+    private static (DayState State, string? Source) State(bool recorded, string? stated, string? witness) => (recorded, stated, witness) switch
     {
-        (true, _) => (DayState.Recorded, "activities"),
-        (false, not null) => (DayState.Rest, $"inferred from {witness}"),
+        (true, _, _) => (DayState.Recorded, "activities"),
+        (false, not null, _) => (DayState.Rest, $"stated by {stated}"),
+        (false, null, not null) => (DayState.Rest, $"inferred from {witness}"),
         _ => (DayState.Unknown, null),
     };
 

@@ -1,3 +1,4 @@
+using LoadWatch.Plans;
 using LoadWatch.Stimulus;
 using NodaTime;
 
@@ -11,12 +12,13 @@ public static class LoadCalendar
     /// are ignored. A day's own state may still be settled by recordings of the 7 days after it (I-6), and with it the values that rest
     /// on that state.
     /// </summary>
+    /// <param name="plan">What plan and answers say of the person: rest that they state is known, and each day carries what holds on it. Null: nothing.</param>
     /// <exception cref="ArgumentException">A load is not finite.</exception>
-    public static IReadOnlyList<Day> Build(string person, IReadOnlyList<ActivityOnDay> activities, LocalDate through)
+    public static IReadOnlyList<Day> Build(string person, IReadOnlyList<ActivityOnDay> activities, LocalDate through, PersonPlan? plan = null)
     {
         var loads = new LoadTrend();
         var regions = BodyRegions.All.Select(region => new StimulusTrend(region)).ToList();
-        return CalendarDates.Lay(activities, through)
+        return CalendarDates.Lay(activities, through, plan ?? PersonPlan.None)
             .Select(date => loads.Add(Bare(person, date)) with { Regions = Regions(regions, date) })
             .ToList();
     }
@@ -29,6 +31,7 @@ public static class LoadCalendar
         StateSource = date.StateSource,
         Load = date.Load,
         DaysSinceRecorded = date.DaysSinceRecorded,
+        Plan = date.Plan,
     };
 
     private static Dictionary<BodyRegion, RegionDay> Regions(List<StimulusTrend> trends, CalendarDate date) =>

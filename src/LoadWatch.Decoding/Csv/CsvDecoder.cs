@@ -3,13 +3,13 @@ using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Csv;
 
-/// <summary>Decodes CSV files: one of the kind <c>samples</c> is a recording, one of any other kind a table.</summary>
+/// <summary>Decodes CSV files: one of the kind <c>samples</c> is a recording or holds those of several people, one of any other kind is a table.</summary>
 public static class CsvDecoder
 {
     /// <summary>
     /// Picks the layout by the file's column names and reads every row by it. A row with a bad cell is a problem with its line, column and
     /// field, and the others count; with too many bad rows (more than 1 % of samples, more than 10 % of a table and more than 3) or no good one
-    /// the file gives nothing.
+    /// the file gives nothing. Speeds of one person that seem to be in another unit than those of the others are left out.
     /// </summary>
     /// <param name="bytes">The whole file.</param>
     /// <param name="layouts">The layouts known.</param>
@@ -19,7 +19,7 @@ public static class CsvDecoder
         return LayoutChoice.Make(bytes, layouts) switch
         {
             { Problem: { } problem } => new DecodedFile("csv", FileType: null, SourceName: null, [], [problem]),
-            { Layout.Kind: CsvKind.Samples } samples => new SampleReading(samples.Table!, samples.Layout!).Read(),
+            { Layout.Kind: CsvKind.Samples } samples => UnitOutliers.LeaveOut(new SampleReading(samples.Table!, samples.Layout!).Read()),
             var table => new TableReading(table.Table!, table.Layout!).Read(),
         };
     }

@@ -30,8 +30,9 @@ public enum CsvKind
 
 /// <summary>
 /// Describes one kind of CSV file, so that nothing about it is guessed. A file has a layout when its first line holds every name of
-/// <see cref="Header"/>, the time column and at least one channel column; of a table the date or time column and at least one column of
-/// <see cref="Fields"/> or <see cref="Wide"/>, if any is named there. Names are compared exactly, without the blanks around them.
+/// <see cref="Header"/>, the time column, the columns of start, date, person and quality that the layout names, and at least one channel
+/// column; of a table the date or time column and at least one column of <see cref="Fields"/> or <see cref="Wide"/>, if any is named there.
+/// Names are compared exactly, without the blanks around them.
 /// </summary>
 public sealed record CsvLayout
 {
@@ -79,10 +80,14 @@ public sealed record CsvLayout
     public string? SportColumn { get; init; }
 
     /// <summary>
-    /// Of a table: the column that names the person, as an id of the roster. It may be absent from a file: then the rows are about the owner of
-    /// the file. Default null.
+    /// The column of the person. Of samples it tells the people or devices of one file apart, as the file writes them: each gets recordings of its
+    /// own, and a row without one cannot be used; rows of one person more than 60 min apart are two recordings. Of a table it may be absent from
+    /// a file: then the rows are about the owner of the file. Default null: one file is one recording, or a table about its owner.
     /// </summary>
     public string? PersonColumn { get; init; }
+
+    /// <summary>Of samples: which rows were received too badly to give a position. Default null: every reading counts.</summary>
+    public CsvQuality? Quality { get; init; }
 
     /// <summary>Of plan and answers: the column that names a group instead of a person; may be absent from a file. Default null.</summary>
     public string? GroupColumn { get; init; }
@@ -157,6 +162,15 @@ public sealed record CsvTimeColumn
 
     /// <summary>How the start is written: any format but <c>seconds_from_start</c>. Default <c>iso8601</c>.</summary>
     public string StartFormat { get; init; } = Iso8601;
+
+    /// <summary>
+    /// For times of day: the column that holds the local date; <see cref="Format"/> is then a pattern of a time of day, or <c>iso8601</c>
+    /// (<c>HH:mm:ss</c> with or without a fraction). Under an empty cell the date goes on, past midnight to the next day. Default null.
+    /// </summary>
+    public string? DateColumn { get; init; }
+
+    /// <summary>How the date is written: <c>iso8601</c> or a NodaTime pattern of a date (<c>dd.MM.yyyy</c>). Default <c>iso8601</c>.</summary>
+    public string DateFormat { get; init; } = Iso8601;
 }
 
 /// <summary>A column that holds the readings of a channel.</summary>

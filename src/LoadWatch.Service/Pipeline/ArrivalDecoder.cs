@@ -1,6 +1,7 @@
 using LoadWatch.Activities;
 using LoadWatch.Decoding;
 using LoadWatch.Recordings;
+using LoadWatch.Rows;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
@@ -14,7 +15,7 @@ namespace LoadWatch.Service.Pipeline;
 public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSet decoders, Archive archive, Instant now)
 {
     /// <summary>Never fails for what the content holds: one that breaks the computation is refused, and the others go on (I-10).</summary>
-    /// <param name="claims">Ids of the people whom all sightings of the content name, or the one whom a decision names.</param>
+    /// <param name="claims">Ids of the people whom all sightings of the content name, or the one whom a decision names; where none, the devices tell.</param>
     public DecodedArrival Decode(ArrivalContent content, IReadOnlyCollection<string> claims)
     {
         try
@@ -37,14 +38,18 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         }
 
         var file = decoders.Decode(content.Bytes);
-        var verdict = OfTheRoster(ArrivalVerdict.Of(file, claims, now));
-        return new DecodedArrival(content.Sha, file.Kind, verdict, verdict.Person is { } person ? Compute(content.Sha, file, person) : []);
+        var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings, now, configuration.Devices, configuration.People);
+        var verdict = OfTheRoster(ArrivalVerdict.Of(file, owners, now));
+        return new DecodedArrival(content.Sha, file.Kind, verdict, verdict.Person is { } person ? Compute(content.Sha, file, person) : [])
+        {
+            Table = verdict.State == ArrivalState.Stored ? file.Table : null,
+        };
     }
 
     /// <summary>Folders only name people of the roster; one whom a decision names may have left it since.</summary>
     private ArrivalVerdict OfTheRoster(ArrivalVerdict verdict) =>
         verdict.Person is { } person && !configuration.People.ContainsKey(person)
-            ? new ArrivalVerdict(ArrivalState.Held, $"assigned to {person}, who is not in the roster", null)
+            ? new ArrivalVerdict(ArrivalState.Held, AssignedFiles.NotInTheRoster(person), null)
             : verdict;
 
     /// <summary>The content of a known arrival, read back from the archive: the object itself, or the member of it that has this hash.</summary>
@@ -52,6 +57,11 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     public ArrivalContent Read(Arrival arrival, string path) =>
         ArrivalContent.Expand(decoders, arrival.ObjectSha, path, archive.Read(arrival.ObjectSha)).FirstOrDefault(content => content.Sha == arrival.Sha)
         ?? throw new InvalidDataException($"the archive object {arrival.ObjectSha[..12]} no longer holds {arrival.Sha[..12]}");
+
+    /// <summary>What a stored table holds.</summary>
+    /// <exception cref="InvalidDataException">The archive does not hold it any more, or it is no table as layouts are now.</exception>
+    public DecodedTable ReadTable(Arrival arrival) =>
+        decoders.Decode(Read(arrival, "").Bytes).Table ?? throw new InvalidDataException($"{arrival.Sha[..12]} is no table");
 
     /// <summary>Computes the values of one recording of a stored arrival again.</summary>
     public ActivityValues Recompute(Arrival arrival, int part)

@@ -25,6 +25,15 @@ public sealed class ArrivalEffects(StoreSession session, ArrivalDecoder decoder)
         }
 
         session.Arrivals.Settle(arrival.Sha, arrival.Verdict.State, arrival.Kind, arrival.Verdict.Reason, arrival.Verdict.Person);
+        if (arrival.Table is { } table)
+        {
+            session.TableVersions.Note(arrival.Sha, table.Layout, table.IsNamedByFolder);
+        }
+        else
+        {
+            session.TableVersions.Forget(arrival.Sha);
+        }
+
         foreach (var recording in arrival.Recordings)
         {
             session.Recordings.Add(recording.Summary);

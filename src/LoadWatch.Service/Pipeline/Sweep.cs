@@ -20,7 +20,9 @@ public sealed class Sweep
     private readonly Intake intake;
     private readonly Recovery recovery;
     private readonly MovedFiles moved;
+    private readonly Answers answers;
     private readonly AssignedFiles assigned;
+    private readonly Tables tables;
     private readonly Briefs briefs;
     private readonly ArchiveReader reader;
 
@@ -37,7 +39,9 @@ public sealed class Sweep
         intake = new Intake(configuration, store, archive, decoders, settlement, now, Report);
         recovery = new Recovery(store, archive, reader, settlement, probe);
         moved = new MovedFiles(configuration, store, archive, reader, settlement, now);
+        answers = new Answers(configuration, store, now);
         assigned = new AssignedFiles(configuration, store, archive, reader, settlement, Report);
+        tables = new Tables(configuration, store, decoder, Report);
         briefs = new Briefs(configuration, now, Report.Unreadable);
     }
 
@@ -56,7 +60,9 @@ public sealed class Sweep
         InboxRemoval.PutBack(configuration);
         intake.TakeIn(Inboxes.Changed(configuration, store, Report), cancel);
         moved.TakeUp();
+        Report.Take(answers.TakeUp());
         assigned.TakeUp(cancel);
+        tables.TakeUp(cancel);
         Evaluate(cancel);
         Report.InAll = store.Read(session => session.Arrivals.CountByState());
         return Report;
@@ -79,6 +85,7 @@ public sealed class Sweep
             settlement.Settle(piece, force: true);
         }
 
+        tables.TakeUp(cancel);
         new DayUpdate(configuration, store, now, Report) { Through = through }.Run(cancel);
         store.Write(session => session.Derived.SetConfigHash(Basis));
         return Report;
@@ -141,7 +148,7 @@ public sealed class Sweep
         }
 
         new DayUpdate(configuration, store, now, Report).Run(cancel);
-        store.Write(new Evaluation(configuration, briefs, now, Report).Run);
+        store.Write(new Evaluation(configuration, answers, briefs, now, Report).Run);
         KillPoint.Pass("evaluated");
         new Deliveries(store, Deliveries.Channels(configuration), Report).Run(now);
         new Pages(configuration, store, briefs, Report).Rewrite(now, all: !PagesAreCurrent || Report.HasNews);

@@ -39,6 +39,8 @@ internal static class TableLayoutCheck
         [
             (layout.Columns.Count > 0, "columns is of samples only: a table has fields"),
             (layout.Sport is not null, "sport is of samples only: a table has it among its constants"),
+            (layout.Quality is not null, "quality is of samples only"),
+            (layout.Time.DateColumn is not null, "time.date_column is of samples only: a table has date_column"),
             (layout.SportColumn is not null, "sport_column is of samples only: a table has it among its fields"),
         ];
         return keys.Where(key => key.IsUsed).Select(key => key.Reason);

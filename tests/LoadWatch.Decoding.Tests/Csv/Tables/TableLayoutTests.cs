@@ -41,6 +41,8 @@ public class TableLayoutTests
         { Good with { GroupColumn = "g" }, "group_column is of plan and answers only" },
         { Good with { Columns = [new() { Column = "p", Unit = "W" }] }, "columns is of samples only: a table has fields" },
         { Good with { Sport = "soccer" }, "sport is of samples only: a table has it among its constants" },
+        { Good with { Quality = new() { Column = "q" } }, "quality is of samples only" },
+        { Good with { Time = new() { DateColumn = "t" } }, "time.date_column is of samples only: a table has date_column" },
         { Good with { SportColumn = "s" }, "sport_column is of samples only: a table has it among its fields" },
         { Good with { Fields = [.. Good.Fields, TableFiles.Field(" ", "set")] }, "fields: the column of set has no name" },
         { Good with { Fields = [.. Good.Fields, TableFiles.Field("w", "weight")] }, "fields: 'weight' is no field of sets: use one of order, time, exercise, " },
