@@ -15,6 +15,11 @@ public static class QuantityWords
         QuantityNames.LuciaLoad => "load by ventilatory thresholds",
         QuantityNames.StagnoLoad => "team-sport load",
         QuantityNames.IndividualTrimp => "training impulse of own weighting",
+        QuantityNames.FosterLoad => "load by rating of effort",
+        QuantityNames.Rating => "rating of effort",
+        QuantityNames.Accelerations => "number of accelerations",
+        QuantityNames.Decelerations => "number of decelerations",
+        QuantityNames.PowerTop => "top power",
         QuantityNames.Minutes => "training time",
         QuantityNames.Distance => "distance",
         QuantityNames.Climb => "climb",
@@ -23,6 +28,8 @@ public static class QuantityWords
         QuantityNames.Sets => "number of sets",
         QuantityNames.Repetitions => "number of repetitions",
         QuantityNames.Kilograms => "weight lifted",
+        _ when name.StartsWith(QuantityNames.OneRepetitionMaxOf, StringComparison.Ordinal) =>
+            $"estimated maximum of {name[QuantityNames.OneRepetitionMaxOf.Length..].Replace('_', ' ')}",
         _ => BoundOf(name) is { } bound ? $"distance at {bound} m/s and faster" : $"\"{name.Replace('_', ' ')}\"",
     };
 
