@@ -30,8 +30,19 @@ public static class QuantityWords
         QuantityNames.Kilograms => "weight lifted",
         _ when name.StartsWith(QuantityNames.OneRepetitionMaxOf, StringComparison.Ordinal) =>
             $"estimated maximum of {name[QuantityNames.OneRepetitionMaxOf.Length..].Replace('_', ' ')}",
+        QuantityNames.SpeedTopShare => "share of the own top speed",
+        _ when ShareOf(name) is { } percent => $"distance at {percent} % of the own top speed and faster",
         _ => BoundOf(name) is { } bound ? $"distance at {bound} m/s and faster" : $"\"{name.Replace('_', ' ')}\"",
     };
+
+    /// <summary>The reverse of <see cref="SpeedMaxShares.Name"/>.</summary>
+    private static string? ShareOf(string name)
+    {
+        const string Ending = "_percent_speed_max";
+        return name.StartsWith(DistanceAbove.Prefix, StringComparison.Ordinal) && name.EndsWith(Ending, StringComparison.Ordinal)
+            ? name[DistanceAbove.Prefix.Length..^Ending.Length].Replace('_', '.')
+            : null;
+    }
 
     /// <summary>The reverse of <see cref="DistanceAbove.Name"/>.</summary>
     private static string? BoundOf(string name)
