@@ -50,7 +50,7 @@ public static class UnitOutliers
 
     private static double? Times(SubjectSpeed one, List<SubjectSpeed> all)
     {
-        var others = all.Where(other => other != one).Select(other => other.Median).Order().ToArray();
+        var others = all.Where(other => other != one).Select(other => other.Median).Order().ToList();
         var times = one.Median / SubjectSpeed.Share(others, 0.5);
         return times > TimesTheOthers && one.High > HighSpeed ? times : null;
     }
@@ -74,12 +74,28 @@ public static class UnitOutliers
     {
         public static SubjectSpeed? Of(string subject, IEnumerable<Recording> recordings)
         {
-            var moving = recordings.SelectMany(recording => recording.Samples[Channel.Speed].ToArray()).Where(value => value >= MovingFrom).ToArray();
-            Array.Sort(moving);
-            return moving.Length == 0 ? null : new SubjectSpeed(subject, Share(moving, 0.5), Share(moving, 0.99));
+            var moving = new List<double>(recordings.Sum(recording => recording.Samples.Count));
+            foreach (var recording in recordings)
+            {
+                AddMoving(moving, recording.Samples[Channel.Speed]);
+            }
+
+            moving.Sort();
+            return moving.Count == 0 ? null : new SubjectSpeed(subject, Share(moving, 0.5), Share(moving, 0.99));
         }
 
         /// <summary>The value at a share of a sorted row: the nearest rank.</summary>
-        public static double Share(double[] sorted, double share) => sorted[Math.Max(0, (int)Math.Ceiling(share * sorted.Length) - 1)];
+        public static double Share(List<double> sorted, double share) => sorted[Math.Max(0, (int)Math.Ceiling(share * sorted.Count) - 1)];
+
+        private static void AddMoving(List<double> moving, ReadOnlySpan<double> speeds)
+        {
+            foreach (var speed in speeds)
+            {
+                if (speed >= MovingFrom)
+                {
+                    moving.Add(speed);
+                }
+            }
+        }
     }
 }
