@@ -69,4 +69,4 @@ public sealed record DayLine(
 public sealed record FindingLine(string Person, string Rule, string? Region, string Date, string Severity, double Value, double Limit, string Unit);
 
 public sealed record AlertLine(
-    string Id, string Person, string Rule, string? Region, string Raised, string State, string Severity, string Text);
+    string Id, string Person, string Rule, string? Region, string Raised, string State, string Severity, string? ShelvedUntil, string Text);

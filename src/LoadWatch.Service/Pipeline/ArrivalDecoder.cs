@@ -15,7 +15,7 @@ namespace LoadWatch.Service.Pipeline;
 public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSet decoders, Archive archive, Instant now)
 {
     /// <summary>Never fails for what the content holds: one that breaks the computation is refused, and the others go on (I-10).</summary>
-    /// <param name="claims">Ids of the people whom all sightings of the content name, or the one whom a decision names.</param>
+    /// <param name="claims">Ids of the people whom all sightings of the content name, or the one whom a decision names; where none, the devices tell.</param>
     public DecodedArrival Decode(ArrivalContent content, IReadOnlyCollection<string> claims)
     {
         try
@@ -38,7 +38,8 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         }
 
         var file = decoders.Decode(content.Bytes);
-        var verdict = OfTheRoster(ArrivalVerdict.Of(file, claims, now));
+        var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings, now, configuration.Devices, configuration.People);
+        var verdict = OfTheRoster(ArrivalVerdict.Of(file, owners, now));
         return new DecodedArrival(content.Sha, file.Kind, verdict, verdict.Person is { } person ? Compute(content.Sha, file, person) : [])
         {
             Table = verdict.State == ArrivalState.Stored ? file.Table : null,
@@ -48,7 +49,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     /// <summary>Folders only name people of the roster; one whom a decision names may have left it since.</summary>
     private ArrivalVerdict OfTheRoster(ArrivalVerdict verdict) =>
         verdict.Person is { } person && !configuration.People.ContainsKey(person)
-            ? new ArrivalVerdict(ArrivalState.Held, $"assigned to {person}, who is not in the roster", null)
+            ? new ArrivalVerdict(ArrivalState.Held, AssignedFiles.NotInTheRoster(person), null)
             : verdict;
 
     /// <summary>The content of a known arrival, read back from the archive: the object itself, or the member of it that has this hash.</summary>

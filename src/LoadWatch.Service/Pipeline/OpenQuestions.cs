@@ -32,7 +32,7 @@ public sealed class OpenQuestions(WorkingConfiguration configuration)
         .ThenBy(same => same.Key.Subject, StringComparer.Ordinal)
         .Select(same => new BriefLine(NameOf(same.Key.Scope), Sentence(same.Key.Subject, same.ToList())));
 
-    private bool IsOfNobody(StoredRow row) => row is { Person: null, Subject.Length: > 0 } && !configuration.Groups.ContainsKey(row.Subject);
+    private bool IsOfNobody(StoredRow row) => row is { Person: null, Subject.Length: > 0 } && configuration.Subjects.Of(row) is null;
 
     private static string Sentence(string subject, List<StoredRow> rows)
     {

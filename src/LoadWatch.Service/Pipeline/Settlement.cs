@@ -51,9 +51,10 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
             .Select(same =>
             {
                 // A content read back from the archive was seen under the names on record; one seen now has its name besides.
-                var paths = session.Sightings.Of(same.Key).Except(gone).Select(sighting => sighting.Path)
-                    .Concat(same.Where(item => item.Origin is not null).Select(item => item.Content.Path));
-                return (same.First().Content, Claims: Attribution.Claims(decided.GetValueOrDefault(same.Key)?.Person, paths, configuration.People), Arrival: session.Arrivals.Get(same.Key));
+                var names = session.Sightings.Of(same.Key).Except(gone).Select(sighting => new SeenName(sighting.Inbox, sighting.Path))
+                    .Concat(same.Where(item => item.Origin is not null).Select(item => new SeenName(item.Origin!.Inbox, item.Content.Path)))
+                    .ToList();
+                return (same.First().Content, Claims: Attribution.Claims(decided.GetValueOrDefault(same.Key)?.Person, names, configuration), Arrival: session.Arrivals.Get(same.Key));
             })
             .Where(item => force || IsPending(item.Arrival, item.Content, item.Claims))
             .Select(item => (item.Content, item.Claims, item.Arrival?.State))
@@ -65,7 +66,9 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
         // An archive file refused inside another one, now seen by itself.
         ArrivalState.Refused => arrival.ParentSha is not null && content.ParentSha is null && content.Kind is ContentKind.Gzip or ContentKind.Zip,
         null or ArrivalState.Waiting => true,
-        ArrivalState.Stored => claims.Count != 1 || claims[0] != arrival.Person,
+
+        // Without a claim its device told whose it is, and still does: another roster or device list computes everything anew.
+        ArrivalState.Stored => claims.Count > 1 || (claims.Count == 1 && claims[0] != arrival.Person),
         ArrivalState.Held => true,
         _ => false,
     };

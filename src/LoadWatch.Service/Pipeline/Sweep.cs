@@ -20,6 +20,7 @@ public sealed class Sweep
     private readonly Intake intake;
     private readonly Recovery recovery;
     private readonly MovedFiles moved;
+    private readonly Answers answers;
     private readonly AssignedFiles assigned;
     private readonly Tables tables;
     private readonly Briefs briefs;
@@ -38,6 +39,7 @@ public sealed class Sweep
         intake = new Intake(configuration, store, archive, decoders, settlement, now, Report);
         recovery = new Recovery(store, archive, reader, settlement, probe);
         moved = new MovedFiles(configuration, store, archive, reader, settlement, now);
+        answers = new Answers(configuration, store, now);
         assigned = new AssignedFiles(configuration, store, archive, reader, settlement, Report);
         tables = new Tables(configuration, store, decoder, Report);
         briefs = new Briefs(configuration, now, Report.Unreadable);
@@ -58,6 +60,7 @@ public sealed class Sweep
         InboxRemoval.PutBack(configuration);
         intake.TakeIn(Inboxes.Changed(configuration, store, Report), cancel);
         moved.TakeUp();
+        Report.Take(answers.TakeUp());
         assigned.TakeUp(cancel);
         tables.TakeUp(cancel);
         Evaluate(cancel);
@@ -145,7 +148,7 @@ public sealed class Sweep
         }
 
         new DayUpdate(configuration, store, now, Report).Run(cancel);
-        store.Write(new Evaluation(configuration, briefs, now, Report).Run);
+        store.Write(new Evaluation(configuration, answers, briefs, now, Report).Run);
         KillPoint.Pass("evaluated");
         new Deliveries(store, Deliveries.Channels(configuration), Report).Run(now);
         new Pages(configuration, store, briefs, Report).Rewrite(now, all: !PagesAreCurrent || Report.HasNews);

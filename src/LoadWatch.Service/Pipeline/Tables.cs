@@ -1,6 +1,5 @@
 using LoadWatch.Notices;
 using LoadWatch.Rows;
-using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Rows;
@@ -13,8 +12,6 @@ namespace LoadWatch.Service.Pipeline;
 /// </summary>
 public sealed class Tables(WorkingConfiguration configuration, Store store, ArrivalDecoder decoder, SweepReport report)
 {
-    private readonly Subjects subjects = new(configuration);
-
     public void TakeUp(CancellationToken cancel)
     {
         var (seen, applied) = store.Read(session => (
@@ -59,7 +56,7 @@ public sealed class Tables(WorkingConfiguration configuration, Store store, Arri
         }
     }
 
-    private string? PersonOf(LoadWatch.Rows.TableRow row, TableVersion version) => row.Subject is { } written ? subjects.Find(written)?.Id : version.Owner;
+    private string? PersonOf(LoadWatch.Rows.TableRow row, TableVersion version) => row.Subject is { } written ? configuration.Subjects.Find(written, row.Date)?.Id : version.Owner;
 
     private void Write(StoreSession session, IReadOnlyList<StoredRow> before, IReadOnlyList<StoredRow> after)
     {
@@ -82,7 +79,7 @@ public sealed class Tables(WorkingConfiguration configuration, Store store, Arri
     {
         { Person: { } person } => [person],
         { Kind: RowKind.Plan, Subject: "" } => configuration.People.Values.Select(person => person.Id),
-        { Kind: RowKind.Plan } => configuration.People.Values.Where(person => person.Group == row.Subject).Select(person => person.Id),
+        { Kind: RowKind.Plan } => (configuration.Subjects.Of(row) ?? []).Select(person => person.Id),
         _ => [],
     };
 }

@@ -47,3 +47,5 @@ ALTER TABLE day ADD COLUMN plan TEXT NOT NULL DEFAULT '{}'
 ALTER TABLE finding RENAME COLUMN region TO about
 ;
 ALTER TABLE alert RENAME COLUMN region TO about
+;
+ALTER TABLE alert ADD COLUMN shelved_until TEXT
