@@ -38,15 +38,13 @@ public static class UnitOutliers
         };
     }
 
-    private static List<SubjectSpeed> Speeds(IReadOnlyList<Recording> recordings) =>
-    [
-        .. from recording in recordings
-           where recording.Subject is not null && recording.Samples.Has(Channel.Speed)
-           group recording by recording.Subject into ofOne
-           let speed = SubjectSpeed.Of(ofOne.Key, ofOne)
-           where speed is not null
-           select speed,
-    ];
+    private static List<SubjectSpeed> Speeds(IReadOnlyList<Recording> recordings)
+    {
+        // One list for all, one after the other: a squad's match holds more than a million readings.
+        var moving = new List<double>();
+        var byPerson = recordings.Where(recording => recording.Subject is not null && recording.Samples.Has(Channel.Speed)).GroupBy(recording => recording.Subject!);
+        return [.. byPerson.Select(ofOne => SubjectSpeed.Of(ofOne.Key, ofOne, moving)).OfType<SubjectSpeed>()];
+    }
 
     private static double? Times(SubjectSpeed one, List<SubjectSpeed> all)
     {
@@ -72,9 +70,9 @@ public static class UnitOutliers
     /// <param name="High">Their 99th percentile, m/s.</param>
     private sealed record SubjectSpeed(string Subject, double Median, double High)
     {
-        public static SubjectSpeed? Of(string subject, IEnumerable<Recording> recordings)
+        public static SubjectSpeed? Of(string subject, IEnumerable<Recording> recordings, List<double> moving)
         {
-            var moving = new List<double>(recordings.Sum(recording => recording.Samples.Count));
+            moving.Clear();
             foreach (var recording in recordings)
             {
                 AddMoving(moving, recording.Samples[Channel.Speed]);
