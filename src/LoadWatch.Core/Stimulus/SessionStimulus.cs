@@ -15,6 +15,9 @@ namespace LoadWatch.Stimulus;
 /// <param name="Remarks">In plain words.</param>
 public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IReadOnlyList<string> Remarks)
 {
+    /// <summary>Exercises of working sets that no body region is known for, in canonical form: to be asked for once, over all people.</summary>
+    public IReadOnlyList<string> Questions { get; init; } = [];
+
     private const string NoChannel =
         "nothing to read it from: power with critical_power, or heart rate with heart_rate_rest and heart_rate_max";
 
@@ -35,16 +38,16 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
         IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> sports)
     {
         var sport = usable.Recording.Sport;
-        if (!sports.TryGetValue(sport.ToString(), out var regions) && !sports.TryGetValue(sport.Name, out regions))
+        if (SportRegions.Of(sport, sports) is not { } regions)
         {
-            var question = $"sport {sport}: which body regions?";
+            var question = SportRegions.Question(sport);
             return new SessionStimulus([.. BodyRegions.All.Select(region => EnduranceEstimate.Nothing.For(region, [question]))], [question]);
         }
 
         var capacity = sport.IsOnFoot ? null : PowerCapacity.On(date, person.Id, anchors);
         var notSeen = NotRead(usable, capacity).ToList();
         var estimate = Best(usable, capacity, date, person, anchors);
-        return new SessionStimulus([.. regions.Distinct().Order().Select(region => estimate.For(region, notSeen))], []);
+        return new SessionStimulus([.. regions.Select(region => estimate.For(region, notSeen))], []);
     }
 
     private static EnduranceEstimate Best(

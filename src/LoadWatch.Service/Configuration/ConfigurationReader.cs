@@ -6,12 +6,14 @@ using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
 using LoadWatch.Loads;
 using LoadWatch.People;
+using LoadWatch.Recordings;
+using LoadWatch.Service.Arrivals;
 using LoadWatch.Stimulus;
 using NodaTime;
 
 namespace LoadWatch.Service.Configuration;
 
-/// <summary>Reads and checks <c>loadwatch.json</c>, the roster and the anchors before anything else is touched.</summary>
+/// <summary>Reads and checks <c>loadwatch.json</c>, the roster, the anchors and the devices before anything else is touched.</summary>
 public sealed class ConfigurationReader
 {
     private readonly string path;
@@ -35,15 +37,16 @@ public sealed class ConfigurationReader
         var json = WithoutMark(Bytes(path, name));
         var file = Parse(json);
         var zone = faults.Zone(file.TimeZone, "$.time_zone") ?? MachineZone.Get();
-        var exercises = Regions(file.Computation.Exercises, DefaultRegions.Exercises, "$.computation.exercises");
+        var exercises = Regions(file.Computation.Exercises, DefaultRegions.Exercises, ExerciseWord.Canonical, "$.computation.exercises");
         var computation = new ComputationSettings
         {
             UsableShareWanted = file.Computation.UsableShareWanted,
             HeartRateReserveBounds = Ascending(file.Computation.HeartRateReserveBounds, "$.computation.heart_rate_reserve_bounds"),
             PowerBounds = Ascending(file.Computation.PowerBounds, "$.computation.power_bounds"),
             SpeedBounds = Ascending(file.Computation.SpeedBounds, "$.computation.speed_bounds"),
+            SpeedMaxShares = Shares(file.Computation.SpeedMaxShares, "$.computation.speed_max_shares"),
             Exercises = exercises,
-            Sports = Regions(file.Computation.Sports, DefaultRegions.Sports, "$.computation.sports"),
+            Sports = Regions(file.Computation.Sports, DefaultRegions.Sports, word => word, "$.computation.sports"),
         };
         var groups = Groups(file, json);
         CheckLayouts(file.Layouts);
@@ -53,6 +56,7 @@ public sealed class ConfigurationReader
         var roster = faults.Collect(() => RosterReader.Read(Resolve(file.Roster), file.Roster, groups.Keys.ToList(), zone));
         var people = (roster ?? []).ToDictionary(person => person.Id, StringComparer.OrdinalIgnoreCase);
         var anchors = faults.Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList()));
+        var devices = faults.Collect(() => roster is null || !HasDevices(file) ? DeviceBook.Empty : DevicesReader.Read(Resolve(file.Devices), file.Devices, people));
         var contacts = ContactsReader.Read(file, groups, roster is null ? null : people, zone, faults);
         var mail = new MailReader(Resolve, faults.Add).Read(file);
         faults.Stop();
@@ -77,6 +81,8 @@ public sealed class ConfigurationReader
             file.Intake.LargestFileMegabytes * 1024L * 1024L)
         {
             Mail = mail,
+            Devices = devices!,
+            Subjects = new Subjects(people, groups, devices!),
         };
     }
 
@@ -120,19 +126,33 @@ public sealed class ConfigurationReader
         var groups = new Dictionary<string, Group>(StringComparer.Ordinal);
         foreach (var (entry, i) in file.Groups.Select((entry, i) => (entry, i)))
         {
-            faults.CheckWords([entry.LoadQuantity], QuantityNames.AllWith(file.Computation.SpeedBounds), $"$.groups[{i}].load_quantity", "a quantity");
+            CheckLoad(entry, QuantityNames.AllWith(file.Computation.SpeedBounds, file.Computation.SpeedMaxShares), $"$.groups[{i}]");
             if (entry.Limits is not null)
             {
                 CheckLimits(limits[i], $"$.groups[{i}].limits");
             }
 
-            if (!groups.TryAdd(entry.Id, new Group(entry.Id, entry.Name.Length > 0 ? entry.Name : entry.Id, entry.LoadQuantity, limits[i])))
+            var group = new Group(entry.Id, entry.Name.Length > 0 ? entry.Name : entry.Id, entry.LoadQuantity, limits[i])
+            {
+                LoadFallbacks = entry.LoadFallbacks,
+            };
+            if (!groups.TryAdd(entry.Id, group))
             {
                 faults.Add($"$.groups[{i}].id", $"the group \"{entry.Id}\" stands above already");
             }
         }
 
         return groups;
+    }
+
+    private void CheckLoad(GroupEntry entry, IReadOnlyList<string> known, string at)
+    {
+        faults.CheckWords([entry.LoadQuantity], known, $"{at}.load_quantity", "a quantity");
+        faults.CheckWords(entry.LoadFallbacks, known, $"{at}.load_fallbacks", "a quantity");
+        if (entry.LoadFallbacks.Contains(entry.LoadQuantity, StringComparer.Ordinal))
+        {
+            faults.Add($"{at}.load_fallbacks", $"\"{entry.LoadQuantity}\" is the group's load itself");
+        }
     }
 
     private void CheckLimits(RuleLimits limits, string at)
@@ -144,13 +164,28 @@ public sealed class ConfigurationReader
     }
 
     private Dictionary<string, IReadOnlyList<BodyRegion>> Regions(
-        IReadOnlyDictionary<string, IReadOnlyList<string>> own, IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> shipped, string at)
+        IReadOnlyDictionary<string, IReadOnlyList<string>> own,
+        IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> shipped,
+        Func<string, string?> canonical,
+        string at)
     {
+        var seen = new HashSet<string>(StringComparer.Ordinal);
         var all = shipped.ToDictionary(pair => pair.Key, pair => pair.Value, StringComparer.Ordinal);
         foreach (var (word, regions) in own)
         {
             faults.CheckWords(regions, BodyRegions.All.Select(BodyRegions.Word), $"{at}.{word}", "a body region");
-            all[word] = regions.Select(BodyRegions.Parse).OfType<BodyRegion>().ToList();
+            if (canonical(word) is not { } key)
+            {
+                faults.Add($"{at}.{word}", $"\"{word}\" holds no letter");
+            }
+            else if (!seen.Add(key))
+            {
+                faults.Add($"{at}.{word}", $"\"{key}\" stands above already, written otherwise");
+            }
+            else
+            {
+                all[key] = regions.Select(BodyRegions.Parse).OfType<BodyRegion>().ToList();
+            }
         }
 
         return all;
@@ -164,6 +199,17 @@ public sealed class ConfigurationReader
         }
 
         return bounds;
+    }
+
+    private IReadOnlyList<double> Shares(IReadOnlyList<double> shares, string at)
+    {
+        var outside = shares.Any(share => share is < SpeedMaxShares.Lowest or > SpeedMaxShares.Highest);
+        if (outside || shares.Zip(shares.Skip(1)).Any(pair => pair.First >= pair.Second))
+        {
+            faults.Add(at, "the shares must rise and lie in 0.5 to 1");
+        }
+
+        return shares;
     }
 
     private void CheckLayouts(IReadOnlyList<CsvLayout> layouts)
@@ -184,8 +230,12 @@ public sealed class ConfigurationReader
             Encoding.UTF8.GetString(json),
             TableFile.TextOf(Resolve(file.Roster), file.Roster),
             TableFile.TextOf(Resolve(file.Anchors), file.Anchors));
+        text += HasDevices(file) ? $"\n{TableFile.TextOf(Resolve(file.Devices), file.Devices)}" : "";
         return (Convert.ToHexStringLower(SHA256.HashData(Encoding.UTF8.GetBytes(text))), text);
     }
+
+    /// <summary>Only under its usual name may the file be missing: another name was written on purpose.</summary>
+    private bool HasDevices(LoadWatchFile file) => file.Devices != LoadWatchFile.DefaultDevices || File.Exists(Resolve(file.Devices));
 
     private string Resolve(string relative) => System.IO.Path.GetFullPath(System.IO.Path.Combine(folder, relative));
 

@@ -17,8 +17,8 @@ internal static class JsonText
         Converters =
         {
             new JsonStringEnumConverter(JsonNamingPolicy.SnakeCaseLower, allowIntegerValues: false),
-            new PatternConverter<LocalDate>(ColumnTypes.Date),
-            new PatternConverter<LocalTime>(LocalTimePattern.ExtendedIso),
+            new JsonDates<LocalDate>(LocalDatePattern.Iso),
+            new JsonDates<LocalTime>(LocalTimePattern.ExtendedIso),
         },
     };
 
