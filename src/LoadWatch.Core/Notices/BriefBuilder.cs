@@ -1,6 +1,7 @@
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
 using LoadWatch.People;
+using LoadWatch.Plans;
 using NodaTime;
 
 namespace LoadWatch.Notices;
@@ -96,9 +97,11 @@ public static class BriefBuilder
         .Where(news => news.ReturnedSince && !IsActive(news))
         .OrderBy(news => RuleTexts.Order(news.Alert.Key.Rule))
         .ThenBy(news => news.Alert.Id, StringComparer.Ordinal)
-        .Select(news => RuleTexts.Returned(news, subject.Group.Limits, self))
+        .Select(news => RuleTexts.Returned(news, subject.Group.Limits, PlanOf(subject), self))
         .Distinct(StringComparer.Ordinal)
         .Select(sentence => new BriefLine(NameOf(subject.Person, self), OneLine.Sentence(sentence)));
+
+    private static DayPlan PlanOf(BriefSubject subject) => subject.Days.Count == 0 ? DayPlan.None : subject.Days[^1].Plan;
 
     private static IReadOnlyList<BriefGroup> Groups(Contact contact, List<BriefSubject> shown, LocalDate upTo, bool self) =>
     [

@@ -69,7 +69,8 @@ public sealed record DayLine(
     [property: JsonPropertyName("heavy_or_fast_28")] IReadOnlyDictionary<string, int?> HeavyOrFast28,
     IReadOnlyDictionary<string, int?> DaysSinceHeavyOrFast);
 
-public sealed record FindingLine(string Person, string Rule, string? Region, string Date, string Severity, double Value, double Limit, string Unit);
+public sealed record FindingLine(
+    string Person, string Rule, string? Region, string? Quantity, string Date, string Severity, double Value, double Limit, string Unit);
 
 public sealed record AlertLine(
-    string Id, string Person, string Rule, string? Region, string Raised, string State, string Severity, string? ShelvedUntil, string Text);
+    string Id, string Person, string Rule, string? Region, string? Quantity, string Raised, string State, string Severity, string? ShelvedUntil, string Text);

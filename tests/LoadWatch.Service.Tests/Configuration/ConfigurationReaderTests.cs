@@ -15,7 +15,7 @@ public sealed class ConfigurationReaderTests
         Assert.Equal(new RuleLimits(), read.Groups["squad"].Limits);
         Assert.Equal(("banister_trimp", 7), (read.Groups["squad"].LoadQuantity, Assert.Single(read.Contacts).BriefDays.Count));
         Assert.Equal((Duration.FromSeconds(60), 32L * 1024 * 1024), (read.Settle, read.LargestFileBytes));
-        Assert.Equal("samples", Assert.Single(read.Layouts).Name);
+        Assert.Equal(["samples", "sessions", "sets", "tests", "days", "plan", "answers"], read.Layouts.Select(layout => layout.Name));
     }
 
     [Fact]
@@ -46,6 +46,19 @@ public sealed class ConfigurationReaderTests
         var read = ConfigurationFolder.With("loadwatch.json", """{ "limits": { "silence": { "extra_days": 9 } } }""");
 
         Assert.Equal(9, Assert.Single(read.Groups.Values).Limits.Silence.ExtraDays);
+    }
+
+    [Fact]
+    public void AGroupTurnsRulesOffAndNamesQuantities()
+    {
+        var read = ConfigurationFolder.With("loadwatch.json", """
+            { "limits": { "load_ratio": { "quantities": ["distance"] } },
+              "groups": [ { "id": "squad", "limits": { "hard_days": { "enabled": false }, "falling_load": { "quantities": ["sprints_of_pods", "climb"] } } } ] }
+            """);
+
+        var limits = read.Groups["squad"].Limits;
+        Assert.Equal((false, true), (limits.HardDays.Enabled, limits.Monotony.Enabled));
+        Assert.Equal(["climb", "distance", "sprints_of_pods"], limits.Quantities);
     }
 
     [Fact]
