@@ -5,6 +5,7 @@ using LoadWatch.Delivery.Page;
 using LoadWatch.Findings;
 using LoadWatch.Notices;
 using LoadWatch.People;
+using LoadWatch.Plans;
 using LoadWatch.Tests;
 using static LoadWatch.Tests.MorningExamples;
 
@@ -19,6 +20,8 @@ public sealed partial class HealthWordsTests
         Subject("ben", "Ben Ollery", Test("ben", AlertState.Acknowledged), LoadRatio("ben")),
         Subject("cas", "Cas Weir", Over(Test("cas", AlertState.Returned))),
         Subject("dot", "Dot Lamb", Over(Test("dot", AlertState.Returned), corrected: true), Silence("dot")),
+        Absent("eve", "Eve Moss", AbsenceWord.Ill, Over(LoadRatio("eve"))),
+        Absent("fay", "Fay Nunn", AbsenceWord.Injured),
     ];
 
     [Theory]
@@ -43,7 +46,7 @@ public sealed partial class HealthWordsTests
 
         Assert.Matches(OfHealth(), Text(brief));
         Assert.Matches(OfHealth(), Page(brief));
-        Assert.Equal("3 of 4 to look at: 1 well above their usual, 1 silent, 1 with function test.", brief.FirstLine);
+        Assert.Equal("3 of 6 to look at: 1 well above their usual, 1 silent, 1 with a function test to look at.", brief.FirstLine);
     }
 
     [Theory]
@@ -54,15 +57,20 @@ public sealed partial class HealthWordsTests
     {
         var told = BriefBuilder.Build(Contact(role), Today, People, []);
 
-        Assert.Equal("2 of 4 to look at: 1 well above their usual, 1 silent.", told.FirstLine);
+        Assert.Equal("2 of 6 to look at: 1 well above their usual, 1 silent.", told.FirstLine);
         Assert.Equal(["Ben Ollery", "Dot Lamb"], told.Flagged.Select(person => person.Name));
         Assert.All(told.Flagged, person => Assert.Single(person.Reasons));
-        Assert.Empty(told.Returned);
-        Assert.Equal([false, true, false, true], told.Groups[0].Rows.Select(row => row.Flagged));
+        Assert.Equal("Eve Moss", Assert.Single(told.Returned).Subject);
+        Assert.Equal([false, true, false, true, false, false], told.Groups[0].Rows.Select(row => row.Flagged));
     }
 
+    private static BriefSubject Absent(string id, string name, AbsenceWord word, params AlertNews[] alerts) => Subject(id, name, alerts) with
+    {
+        Days = [.. QuietDays(id, 60).Select(day => day with { Plan = DayPlan.None with { Absence = word } })],
+    };
+
     private static AlertNews Test(string person, AlertState state) => News(
-        person, RoleView.FunctionTest, null, Severity.Warning, state, "chair stand test fell from 14 to 9; illness, injury and pain reported, diagnosis open", isNew: true);
+        person, FunctionTestRule.RuleName, null, Severity.Warning, state, "chair stand test fell from 14 to 9; illness, injury and pain reported, diagnosis open", isNew: true);
 
     /// <summary>Without the cautions, which are the same for everybody.</summary>
     private static string Text(Brief brief)

@@ -97,7 +97,7 @@ public sealed class HostileListingTests : IDisposable
     }
 
     private static string Roster() => "person,name,group\n" + string.Concat(HostileTexts.All.Select((text, place) =>
-        $"{Id(place)},\"{text.Replace("\"", "\"\"", StringComparison.Ordinal)}\",squad\n"));
+        $"{Id(place)},\"{Utf8(text).Replace("\"", "\"\"", StringComparison.Ordinal)}\",squad\n"));
 
     private static string Id(int place) => place.ToString("'p'000", CultureInfo.InvariantCulture);
 

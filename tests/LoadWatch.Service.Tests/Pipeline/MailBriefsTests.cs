@@ -72,7 +72,7 @@ public sealed class MailBriefsTests : IDisposable
         using var desk = new MailWorkplace(contact: $", \"role\": \"{role}\"");
         Decide(Morning, desk);
 
-        var test = MorningExamples.News("ann", RoleView.FunctionTest, null, Severity.Notice, AlertState.Unacknowledged, "chair stand fell", isNew: true);
+        var test = MorningExamples.News("ann", FunctionTestRule.RuleName, null, Severity.Notice, AlertState.Unacknowledged, "chair stand fell", isNew: true);
         store.Write(session => session.Alerts.Put(test.Alert));
 
         Assert.Equal(updates, Decide(Morning + Duration.FromHours(2), desk));
