@@ -63,16 +63,16 @@ public sealed class AnswersTests : IDisposable
     [Fact]
     public void ARowThatGoesIsWithdrawnAndOneThatComesBackDecidesAnew()
     {
+        folder.Sweep();
         var row = Row("anna", Today.PlusDays(-3), Say(AnswerWord.Ill));
         folder.PutRows(row);
-        folder.TakeUp();
         folder.Sweep();
 
         folder.PutRows();
 
         Assert.Equal((0, 1), Counts(folder.TakeUp()));
         Assert.Empty(folder.InForce());
-        Assert.Equal(["ill", "withdraw"], folder.Decisions().Select(decision => decision.Kind.ToString().ToLowerInvariant()));
+        Assert.Equal([DecisionKind.Ill, DecisionKind.Withdraw], folder.Decisions().Select(decision => decision.Kind));
         Assert.Equal(Today.PlusDays(-3), folder.Read((_, session) => session.People.Dirty()[0].From));
         folder.PutRows(row);
         Assert.Equal((1, 0), Counts(folder.TakeUp()));
@@ -144,6 +144,7 @@ public sealed class AnswersTests : IDisposable
     [Fact]
     public void AFileThatComesLaterIsAssignedThen()
     {
+        folder.Sweep();
         folder.PutRows(Row("anna", Today, Say(AnswerWord.BelongsTo, file: "ride.fit"), "anna"));
         Assert.Single(folder.TakeUp().Questions);
         folder.Put("ride.fit", Some.Fit(Some.Yesterday));
