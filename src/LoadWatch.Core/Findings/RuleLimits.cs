@@ -14,6 +14,18 @@ public sealed record RuleLimits
 
     /// <summary>Expected recordings did not come.</summary>
     public SilenceLimits Silence { get; init; } = new();
+
+    /// <summary>Too few heavy-or-fast days of a body region.</summary>
+    public StimulusLowLimits StimulusLow { get; init; } = new();
+
+    /// <summary>The best of the last weeks below the best before.</summary>
+    public FallingCapacityLimits FallingCapacity { get; init; } = new();
+
+    /// <summary>Recordings of too little quality.</summary>
+    public NotUsableLimits NotUsable { get; init; } = new();
+
+    /// <summary>Function tests beyond a published cut-off or down by more than their error.</summary>
+    public FunctionTestLimits FunctionTest { get; init; } = new();
 }
 
 /// <summary>Limits of the rule <c>load_ratio</c>: acute load well above the usual, uncoupled.</summary>
@@ -99,6 +111,14 @@ public sealed record SilenceLimits
     /// <summary>How far back gaps are looked at. Days.</summary>
     [Range(28, 400)]
     public int LookBackDays { get; init; } = 84;
+
+    /// <summary>Where the plan expects recordings: planned sessions in a row without one. Count.</summary>
+    [Range(1, 20)]
+    public int PlannedMissed { get; init; } = 2;
+
+    /// <summary>Days that a recording of a planned session may take to come in. Days.</summary>
+    [Range(0, 14)]
+    public int PlannedWaitDays { get; init; } = 2;
 
     /// <summary>Longer than this is silence whatever the person's own gaps were. Days.</summary>
     [Range(7, 400)]

@@ -43,6 +43,7 @@ public sealed class ConfigurationReader
             HeartRateReserveBounds = Ascending(file.Computation.HeartRateReserveBounds, "$.computation.heart_rate_reserve_bounds"),
             PowerBounds = Ascending(file.Computation.PowerBounds, "$.computation.power_bounds"),
             SpeedBounds = Ascending(file.Computation.SpeedBounds, "$.computation.speed_bounds"),
+            SpeedMaxShares = Shares(file.Computation.SpeedMaxShares, "$.computation.speed_max_shares"),
             Exercises = exercises,
             Sports = Regions(file.Computation.Sports, DefaultRegions.Sports, "$.computation.sports"),
         };
@@ -124,19 +125,33 @@ public sealed class ConfigurationReader
         var groups = new Dictionary<string, Group>(StringComparer.Ordinal);
         foreach (var (entry, i) in file.Groups.Select((entry, i) => (entry, i)))
         {
-            faults.CheckWords([entry.LoadQuantity], QuantityNames.AllWith(file.Computation.SpeedBounds), $"$.groups[{i}].load_quantity", "a quantity");
+            CheckLoad(entry, QuantityNames.AllWith(file.Computation.SpeedBounds, file.Computation.SpeedMaxShares), $"$.groups[{i}]");
             if (entry.Limits is not null)
             {
                 CheckLimits(limits[i], $"$.groups[{i}].limits");
             }
 
-            if (!groups.TryAdd(entry.Id, new Group(entry.Id, entry.Name.Length > 0 ? entry.Name : entry.Id, entry.LoadQuantity, limits[i])))
+            var group = new Group(entry.Id, entry.Name.Length > 0 ? entry.Name : entry.Id, entry.LoadQuantity, limits[i])
+            {
+                LoadFallbacks = entry.LoadFallbacks,
+            };
+            if (!groups.TryAdd(entry.Id, group))
             {
                 faults.Add($"$.groups[{i}].id", $"the group \"{entry.Id}\" stands above already");
             }
         }
 
         return groups;
+    }
+
+    private void CheckLoad(GroupEntry entry, IReadOnlyList<string> known, string at)
+    {
+        faults.CheckWords([entry.LoadQuantity], known, $"{at}.load_quantity", "a quantity");
+        faults.CheckWords(entry.LoadFallbacks, known, $"{at}.load_fallbacks", "a quantity");
+        if (entry.LoadFallbacks.Contains(entry.LoadQuantity, StringComparer.Ordinal))
+        {
+            faults.Add($"{at}.load_fallbacks", $"\"{entry.LoadQuantity}\" is the group's load itself");
+        }
     }
 
     private void CheckLimits(RuleLimits limits, string at)
@@ -168,6 +183,17 @@ public sealed class ConfigurationReader
         }
 
         return bounds;
+    }
+
+    private IReadOnlyList<double> Shares(IReadOnlyList<double> shares, string at)
+    {
+        var outside = shares.Any(share => share is < SpeedMaxShares.Lowest or > SpeedMaxShares.Highest);
+        if (outside || shares.Zip(shares.Skip(1)).Any(pair => pair.First >= pair.Second))
+        {
+            faults.Add(at, "the shares must rise and lie in 0.5 to 1");
+        }
+
+        return shares;
     }
 
     private void CheckLayouts(IReadOnlyList<CsvLayout> layouts)

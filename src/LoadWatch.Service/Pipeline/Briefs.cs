@@ -136,7 +136,12 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     }
 
     private List<BriefLine> Questions(StoreSession session, Contact contact) =>
-        [.. MissedNotices.Lines(session, contact, Ways(contact), now), .. Files(session, contact)];
+        
+    [
+        .. MissedNotices.Lines(session, contact, Ways(contact), now),
+        .. Files(session, contact),
+        .. new OpenQuestions(configuration).Lines(session, contact, now.InZone(contact.Zone).Date),
+    ];
 
     private List<BriefLine> Files(StoreSession session, Contact contact)
     {
