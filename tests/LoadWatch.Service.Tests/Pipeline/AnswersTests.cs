@@ -80,6 +80,22 @@ public sealed class AnswersTests : IDisposable
         Assert.Equal((0, 0), Counts(folder.TakeUp(Later)));
     }
 
+    [Fact]
+    public void ATableThatIsLostTakesNothingBack()
+    {
+        folder.PutRows(Row("anna", Today, Say(AnswerWord.Ill)));
+        folder.TakeUp();
+
+        folder.Write((_, session) =>
+        {
+            session.TableRows.Remove(session.TableRows.OfScope(Scope));
+            return true;
+        });
+
+        Assert.Equal((0, 0), Counts(folder.TakeUp(Later)));
+        Assert.Single(folder.InForce());
+    }
+
     [Theory]
     [InlineData("until")]
     [InlineData("note")]
@@ -138,6 +154,7 @@ public sealed class AnswersTests : IDisposable
         var question = Assert.Single(folder.TakeUp().Questions);
 
         Assert.Equal(("answers.csv, 15 June", reason), (question.Subject, question.Sentence));
+        Assert.Equal([question], folder.Read((workplace, session) => new Answers(workplace.Configuration, workplace.Store, WorkingFolder.Now).Questions(session)));
         Assert.Empty(folder.Decisions());
     }
 
