@@ -49,7 +49,7 @@ public sealed record LoadWatchFile
     /// <summary>The server that takes mail.</summary>
     public MailEntry Mail { get; init; } = new();
 
-    /// <summary>CSV layouts beside the built-in one; the header picks the layout.</summary>
+    /// <summary>CSV layouts beside the built-in ones; the header picks the layout.</summary>
     public IReadOnlyList<CsvLayout> Layouts { get; init; } = [];
 
     /// <summary>Zones, body regions, and how much of a recording must be usable.</summary>
@@ -149,6 +149,9 @@ public sealed record ContactEntry
 
     /// <summary>Address for mail; blank for none.</summary>
     public string Mail { get; init; } = "";
+
+    /// <summary>How mail names the people: <c>full</c>, <c>initials</c>, or <c>none</c> (counts only). Page and notice file name them in full.</summary>
+    public NamesShown Names { get; init; } = NamesShown.Full;
 }
 
 /// <summary>What may be set of the computation.</summary>

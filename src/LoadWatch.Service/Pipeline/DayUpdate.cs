@@ -76,9 +76,12 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
         var findings = RuleBook.Evaluate(new RuleSubject(person, days, group.Limits)
         {
             LoadUnit = LoadUnits.Of(group.LoadQuantity),
+            LoadQuantity = group.LoadQuantity,
             Activities = activities,
             Plan = plan,
             Tests = tests.FindAll(test => test.Date <= through),
+            Series = group.Limits.Quantities.ToDictionary(
+                name => name, name => new QuantitySeries(name, LoadUnits.Of(name), Days(person, name, [], activities, through, plan)), StringComparer.Ordinal),
         });
         return new ComputedSeries(
             person.Id,
