@@ -60,12 +60,12 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
 
     private IEnumerable<ActivityLine> Activities(string id)
     {
-        var person = configuration.People[id];
+        var known = configuration.People[id];
         var recorded = session.Activities.OfPerson(id, from, to).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
         basis ??= TableBasis.Of(configuration, session);
-        return PersonTraining.Of(session, configuration, basis, person).Activities
+        return PersonTraining.Of(session, configuration, basis, known).Activities
             .Where(activity => InRange(activity.Date))
-            .Select(activity => Activity(person, activity, recorded.GetValueOrDefault(activity.Key)));
+            .Select(activity => Activity(known, activity, recorded.GetValueOrDefault(activity.Key)));
     }
 
     /// <param name="recorded">What was recorded of it; null where rows of tables stand for the session alone.</param>

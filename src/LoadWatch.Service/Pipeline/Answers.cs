@@ -1,9 +1,5 @@
-using LoadWatch.Alerts;
 using LoadWatch.Notices;
-using LoadWatch.People;
 using LoadWatch.Rows;
-using LoadWatch.Service.Arrivals;
-using LoadWatch.Service.Commands;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Decisions;
