@@ -69,18 +69,18 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
     }
 
     /// <param name="recorded">What was recorded of it; null where rows of tables stand for the session alone.</param>
-    private ActivityLine Activity(Person person, JoinedActivity activity, StoredActivity? recorded)
+    private ActivityLine Activity(Person owner, JoinedActivity activity, StoredActivity? recorded)
     {
         var values = recorded?.Values ?? new ActivityValues();
         return new ActivityLine(
-            person.Id,
+            owner.Id,
             Words.Date(activity.Date),
-            activity.Start is { } start ? Words.Start(start.WithOffset(recorded?.Winner.LocalOffset ?? person.Zone.GetUtcOffset(start))) : null,
+            activity.Start is { } start ? Words.Start(start.WithOffset(recorded?.Winner.LocalOffset ?? owner.Zone.GetUtcOffset(start))) : null,
             activity.Sport.ToString(),
             recorded?.Winner.ElapsedSeconds,
             recorded?.Winner.TimerSeconds,
             activity.Quantities.Select(quantity => new QuantityLine(quantity.Name, quantity.Value, quantity.Unit, quantity.Estimated)).ToList(),
-            configuration.Groups[person.Group].LoadQuantity,
+            configuration.Groups[owner.Group].LoadQuantity,
             TimesInZone(values.TimesInZone),
             values.HeartRateMeanBpm,
             values.HeartRateMaxBpm,

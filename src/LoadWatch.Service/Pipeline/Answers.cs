@@ -1,9 +1,5 @@
-using LoadWatch.Alerts;
 using LoadWatch.Notices;
-using LoadWatch.People;
 using LoadWatch.Rows;
-using LoadWatch.Service.Arrivals;
-using LoadWatch.Service.Commands;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Decisions;
@@ -14,7 +10,7 @@ namespace LoadWatch.Service.Pipeline;
 
 /// <summary>
 /// Brings decisions in line with the rows of answers: a row without its decisions makes them, a decision whose row is gone or says something else is withdrawn.
-/// A second time changes nothing. What a row made stays as it was made while the row stands unchanged, whoever joins the group later.
+/// A second time changes nothing. A table of which no row is left was lost, not retracted: what it told stands. What a row made stays as it was made while the row stands unchanged, whoever joins the group later.
 /// </summary>
 public sealed class Answers(WorkingConfiguration configuration, Store store, Instant now)
 {
@@ -25,17 +21,29 @@ public sealed class Answers(WorkingConfiguration configuration, Store store, Ins
     public AnswersReport TakeUp(StoreSession session)
     {
         var all = session.Decisions.All();
-        var told = DecisionTable.InForce(all).Where(decision => decision.IsAnswer).ToLookup(decision => decision.Via!, StringComparer.Ordinal);
-        var reading = new AnswerReading(configuration, session, now);
-        var rows = session.TableRows.OfKind(RowKind.Answers).Select(row => Read(row, told, reading)).ToList();
+        var told = Told(all);
+        var rows = Read(session, told);
         var kept = rows.SelectMany(row => row.Kept).Select(decision => decision.Id).ToHashSet(StringComparer.Ordinal);
 
         var effects = new DecisionEffects(configuration, session);
         var taken = all.Select(decision => decision.Id).ToHashSet(StringComparer.Ordinal);
-        var gone = told.SelectMany(same => same).Where(decision => !kept.Contains(decision.Id)).ToList();
+        var gone = told.SelectMany(same => same).Where(decision => !kept.Contains(decision.Id) && HasRows(session, decision.Via!)).ToList();
         gone.ForEach(decision => effects.Withdraw(decision, now, decision.Via));
         var made = rows.SelectMany(row => row.Wanted).Count(decision => effects.Make(WithFreeId(decision, taken)));
         return new AnswersReport(made, gone.Count, [.. rows.Select(row => row.Question).OfType<BriefLine>()]);
+    }
+
+    /// <summary>Rows that nobody can follow as things stand, by table and date, with the reason. Writes nothing.</summary>
+    public IReadOnlyList<BriefLine> Questions(StoreSession session) =>
+        [.. Read(session, Told(session.Decisions.All())).Select(row => row.Question).OfType<BriefLine>()];
+
+    private static ILookup<string, Decision> Told(IReadOnlyList<Decision> all) =>
+        DecisionTable.InForce(all).Where(decision => decision.IsAnswer).ToLookup(decision => decision.Via!, StringComparer.Ordinal);
+
+    private List<ReadAnswer> Read(StoreSession session, ILookup<string, Decision> told)
+    {
+        var reading = new AnswerReading(configuration, session, now);
+        return [.. session.TableRows.OfKind(RowKind.Answers).Select(row => Read(row, told, reading))];
     }
 
     private static ReadAnswer Read(StoredRow row, ILookup<string, Decision> told, AnswerReading reading)
@@ -44,6 +52,12 @@ public sealed class Answers(WorkingConfiguration configuration, Store store, Ins
         var (wanted, question) = reading.Of(row, kept);
         return new ReadAnswer(kept, wanted, question);
     }
+
+    /// <summary>Whether anything is left of the table that told a decision. A version of a table without rows says nothing, so an empty one never means it.</summary>
+    private static bool HasRows(StoreSession session, string via) => Enumerable.Range(0, via.Length)
+        .Where(at => via[at] == '|')
+        .Select(at => via[..at])
+        .Any(table => Decision.ScopeOf(table) is { } scope && session.TableRows.OfScope(scope).Any(row => row.Kind == RowKind.Answers));
 
     /// <summary>A row that went and came back within one moment decides a nanosecond later.</summary>
     private static Decision WithFreeId(Decision decision, HashSet<string> taken)

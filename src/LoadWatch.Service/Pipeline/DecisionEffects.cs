@@ -1,5 +1,4 @@
 using LoadWatch.Alerts;
-using LoadWatch.People;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage;

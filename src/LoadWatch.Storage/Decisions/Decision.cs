@@ -57,6 +57,9 @@ public sealed record Decision(DecisionKind Kind, string Subject, string Person, 
     /// <param name="subject">As the table writes it.</param>
     public static string ViaRow(string scope, string subject, string key) => $"{ViaAnswers}{scope}|{subject}|{key}";
 
+    /// <summary>The table at the beginning of a row's name, where that is cut off behind it; null for anything else.</summary>
+    public static string? ScopeOf(string beginning) => beginning.StartsWith(ViaAnswers, StringComparison.Ordinal) ? beginning[ViaAnswers.Length..] : null;
+
     /// <summary>Whether a row of answers told it.</summary>
     public bool IsAnswer => Via?.StartsWith(ViaAnswers, StringComparison.Ordinal) == true;
 

@@ -22,7 +22,7 @@ public sealed class DecisionTable
     /// <summary>Appends a decision; an error when there is one of the same kind, subject and row at the very same moment.</summary>
     public void Add(Decision decision) => session.Execute(Insert, Row.From(decision));
 
-    /// <summary>Every decision in the order of their moments; of one moment in the order of their first dates.</summary>
+    /// <summary>Every decision in the order of their moments; of one moment in the order of their first dates, withdrawals last.</summary>
     public IReadOnlyList<Decision> All() => Select(SelectAll);
 
     /// <summary>All that are in force by themselves, neither withdrawn nor a withdrawal; sorted as above.</summary>
@@ -75,6 +75,7 @@ public sealed class DecisionTable
         .. session.Rows<Row>(sql, values)
             .Select(row => row.ToDecision())
             .OrderBy(decision => decision.Made)
+            .ThenBy(decision => decision.Kind == DecisionKind.Withdraw)
             .ThenBy(decision => decision.From ?? LocalDate.MinIsoValue)
             .ThenBy(decision => decision.Kind)
             .ThenBy(decision => decision.Id, StringComparer.Ordinal),

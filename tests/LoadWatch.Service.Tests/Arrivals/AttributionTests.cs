@@ -89,7 +89,7 @@ public sealed class AttributionTests : IDisposable
 
     [Fact]
     public void ANameOfTwoPeopleTellsNobody() =>
-        Assert.Null(ConfigurationFolder.With("roster.csv", "person,name,group\na1,Anna,squad\na2,Anna,squad\n").Subjects.Find("Anna"));
+        Assert.Null(ConfigurationFolder.With("roster.csv", "person,name,group\nanna,Kim,squad\nben,Kim,squad\n").Subjects.Find("Kim"));
 
     [Theory]
     [InlineData("SQUAD", "squad")]

@@ -16,7 +16,12 @@ public sealed class AlertAnswersTests : IDisposable
 
     private readonly WorkingFolder folder = new();
 
-    public AlertAnswersTests() => folder.Fill(Some.Fortnight());
+    public AlertAnswersTests()
+    {
+        // The first sweep under a configuration reads every row anew, and these have no table behind them.
+        folder.Sweep(WorkingFolder.Now - Duration.FromDays(1));
+        folder.Fill(Some.Fortnight());
+    }
 
     public void Dispose() => folder.Dispose();
 
@@ -72,7 +77,6 @@ public sealed class AlertAnswersTests : IDisposable
         folder.Sweep();
 
         Assert.Equal(AlertState.Acknowledged, Alert().State);
-        Assert.DoesNotContain("- Anna Ahola (notice)", folder.NoticeText, StringComparison.Ordinal);
         var before = folder.Everything();
         folder.Sweep();
         Assert.Equal(before, folder.Everything());
@@ -85,13 +89,15 @@ public sealed class AlertAnswersTests : IDisposable
         folder.Sweep();
         Assert.Equal((AlertState.Unacknowledged, Today.PlusDays(1)), (Alert().State, Alert().ShelvedUntil));
         Assert.Contains("\"shelved_until\":\"2026-06-16\"", folder.Export("alerts"), StringComparison.Ordinal);
-        Assert.Contains("All quiet", folder.NoticeText, StringComparison.Ordinal);
+        Assert.Contains("Shelved until 16 Jun: ", Page(), StringComparison.Ordinal);
+        Assert.DoesNotContain("to look at", folder.NoticeText, StringComparison.Ordinal);
 
         folder.Sweep(Later);
         Assert.Equal(Today.PlusDays(1), Alert().ShelvedUntil);
 
         folder.Sweep(Later + Duration.FromDays(1));
         Assert.Null(Alert().ShelvedUntil);
+        Assert.Contains("to look at", folder.NoticeText, StringComparison.Ordinal);
         Assert.Equal(
             [AlertChangeReason.Raised, AlertChangeReason.Shelved, AlertChangeReason.Unshelved],
             folder.Read((_, session) => session.Alerts.Changes.Of(Alert().Id).Select(change => change.Reason)));
@@ -115,6 +121,8 @@ public sealed class AlertAnswersTests : IDisposable
         folder.TakeUp();
         Assert.Null(Alert().ShelvedUntil);
     }
+
+    private string Page() => File.ReadAllText(Path.Combine(folder.Root, "pages", "staff.html"));
 
     private Alert Alert() => folder.Read((_, session) => Assert.Single(session.Alerts.All()));
 }

@@ -63,21 +63,37 @@ public sealed class AnswersTests : IDisposable
     [Fact]
     public void ARowThatGoesIsWithdrawnAndOneThatComesBackDecidesAnew()
     {
+        folder.Sweep();
         var row = Row("anna", Today.PlusDays(-3), Say(AnswerWord.Ill));
         folder.PutRows(row);
-        folder.TakeUp();
         folder.Sweep();
 
         folder.PutRows();
 
         Assert.Equal((0, 1), Counts(folder.TakeUp()));
         Assert.Empty(folder.InForce());
-        Assert.Equal(["ill", "withdraw"], folder.Decisions().Select(decision => decision.Kind.ToString().ToLowerInvariant()));
+        Assert.Equal([DecisionKind.Ill, DecisionKind.Withdraw], folder.Decisions().Select(decision => decision.Kind));
         Assert.Equal(Today.PlusDays(-3), folder.Read((_, session) => session.People.Dirty()[0].From));
         folder.PutRows(row);
         Assert.Equal((1, 0), Counts(folder.TakeUp()));
         Assert.Equal(DecisionKind.Ill, Assert.Single(folder.InForce()).Kind);
         Assert.Equal((0, 0), Counts(folder.TakeUp(Later)));
+    }
+
+    [Fact]
+    public void ATableThatIsLostTakesNothingBack()
+    {
+        folder.PutRows(Row("anna", Today, Say(AnswerWord.Ill)));
+        folder.TakeUp();
+
+        folder.Write((_, session) =>
+        {
+            session.TableRows.Remove(session.TableRows.OfScope(Scope));
+            return true;
+        });
+
+        Assert.Equal((0, 0), Counts(folder.TakeUp(Later)));
+        Assert.Single(folder.InForce());
     }
 
     [Theory]
@@ -138,12 +154,14 @@ public sealed class AnswersTests : IDisposable
         var question = Assert.Single(folder.TakeUp().Questions);
 
         Assert.Equal(("answers.csv, 15 June", reason), (question.Subject, question.Sentence));
+        Assert.Equal([question], folder.Read((workplace, session) => new Answers(workplace.Configuration, workplace.Store, WorkingFolder.Now).Questions(session)));
         Assert.Empty(folder.Decisions());
     }
 
     [Fact]
     public void AFileThatComesLaterIsAssignedThen()
     {
+        folder.Sweep();
         folder.PutRows(Row("anna", Today, Say(AnswerWord.BelongsTo, file: "ride.fit"), "anna"));
         Assert.Single(folder.TakeUp().Questions);
         folder.Put("ride.fit", Some.Fit(Some.Yesterday));

@@ -53,6 +53,7 @@ public sealed class DeviceOwnerTests : IDisposable
     public void AnAssignmentGoesBeforeTheDeviceUntilItIsWithdrawn()
     {
         folder.Write("devices.csv", $"{Header}4711,anna,,,\n");
+        folder.Sweep();
         folder.Put("ride.fit", Ride);
         folder.PutRows(AnswerRows.Row("bo", Some.Yesterday, AnswerRows.Say(LoadWatch.Rows.AnswerWord.BelongsTo, file: "ride.fit"), "bo"));
         folder.Sweep();
