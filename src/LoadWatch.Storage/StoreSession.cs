@@ -39,6 +39,7 @@ public sealed class StoreSession
         TableRows = new RowTable(this);
         TableVersions = new TableVersionTable(this);
         Questions = new QuestionTable(this);
+        Recomputations = new RecomputationTable(this);
         People = new PersonStateTable(this);
         Configurations = new ConfigurationTable(this);
         Derived = new DerivedRows(this);
@@ -70,6 +71,8 @@ public sealed class StoreSession
     public TableVersionTable TableVersions { get; }
 
     public QuestionTable Questions { get; }
+
+    public RecomputationTable Recomputations { get; }
 
     public PersonStateTable People { get; }
 

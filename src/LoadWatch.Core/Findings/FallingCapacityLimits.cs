@@ -5,6 +5,7 @@ namespace LoadWatch.Findings;
 /// <summary>Limits of the rule <c>falling_capacity</c>: the best of the last weeks is below the best of the weeks before.</summary>
 public sealed record FallingCapacityLimits
 {
+    /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;
 
     /// <summary>Length of each of the two stretches. A choice. Days.</summary>

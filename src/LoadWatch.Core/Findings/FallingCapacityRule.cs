@@ -16,10 +16,12 @@ public sealed class FallingCapacityRule : IRule
 {
     public string Name => "falling_capacity";
 
+    public bool IsEnabled(RuleLimits limits) => limits.FallingCapacity.Enabled;
+
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var limits = subject.Limits.FallingCapacity;
-        if (!limits.Enabled || subject.Days.Count == 0)
+        if (subject.Days.Count == 0)
         {
             return [];
         }

@@ -4,12 +4,12 @@ using NodaTime;
 namespace LoadWatch.Findings;
 
 /// <summary>A rule that holds for a person on a date.</summary>
-/// <param name="Rule">Name of the rule: <c>load_ratio</c>, <c>stimulus_gap</c>, <c>silence</c>.</param>
+/// <param name="Rule">Name of the rule, such as <c>load_ratio</c>.</param>
 /// <param name="Region">For stimulus rules.</param>
 /// <param name="Since">First date of the unbroken run of this finding.</param>
 /// <param name="Value">The value on the date, rounded to 9 significant digits.</param>
 /// <param name="Limit">The limit that it passed.</param>
-/// <param name="Unit">Of value and limit; <c>ratio</c> or <c>days</c>.</param>
+/// <param name="Unit">Of value and limit; <c>ratio</c>, <c>fraction</c> (0.4 is 40 % more), <c>days</c> or <c>matches</c>.</param>
 /// <param name="Text">One sentence without a name: what, since when, against the usual.</param>
 public sealed record Finding(
     string Person,

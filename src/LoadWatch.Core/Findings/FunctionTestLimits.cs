@@ -5,6 +5,7 @@ namespace LoadWatch.Findings;
 /// <summary>Limits of the rule <c>function_test</c>: falls that are more than the error of the test. From memory, not re-read; configurable for that reason.</summary>
 public sealed record FunctionTestLimits
 {
+    /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;
 
     /// <summary>Fall of grip strength. Kilograms.</summary>

@@ -7,6 +7,9 @@ public interface IRule
     /// <summary>Lower-case words joined by underscores; part of alert ids.</summary>
     string Name { get; }
 
+    /// <summary>Whether the limits leave it on.</summary>
+    bool IsEnabled(RuleLimits limits);
+
     /// <summary>
     /// The findings of every date of the subject on which the rule holds, in date order. Raise and return values make the run; an unknown
     /// stretch alone neither raises nor clears (I-6).

@@ -3,14 +3,14 @@
 // the limit of 1.8 uncoupled is 1.5 coupled: C = 4 U / (U + 3). That a limit is watched at all, its value, coverage and return value are
 // a choice: the ratio describes change and nothing else.
 using LoadWatch.Days;
-using LoadWatch.People;
 using NodaTime;
 
 namespace LoadWatch.Findings;
 
 /// <summary>
 /// The last 7 days are well above the usual week. Raised at the limit, holds until below the return value; history and chronic load are
-/// asked for when it is raised, coverage always: a day covered too thinly leaves things as they were (I-6).
+/// asked for when it is raised, coverage always: a date of unknown load, or covered too thinly, leaves things as they were (I-6). Off in absences and after the
+/// return.
 /// </summary>
 public sealed class LoadRatioRule : IRule
 {
@@ -19,44 +19,45 @@ public sealed class LoadRatioRule : IRule
 
     public string Name => "load_ratio";
 
-    public IEnumerable<Finding> Evaluate(RuleSubject subject)
+    public bool IsEnabled(RuleLimits limits) => limits.LoadRatio.Enabled;
+
+    public IEnumerable<Finding> Evaluate(RuleSubject subject) => WatchedSeries.Of(subject, subject.Limits.LoadRatio.Quantities)
+        .SelectMany(series => Evaluate(series, subject.Limits.LoadRatio))
+        .OrderBy(finding => finding.Date);
+
+    private IEnumerable<Finding> Evaluate(WatchedSeries series, LoadRatioLimits limits)
     {
-        var (person, days, limits) = subject;
-        LocalDate? since = null;
-        Day? read = null;
-        foreach (var day in days)
+        var run = new FindingRun<Day>();
+        foreach (var day in series.Days)
         {
-            if (IsKnown(day, limits.LoadRatio))
+            if (day.Plan.IsAwayOrReturning())
             {
-                read = day;
-                since = Since(since, day, limits.LoadRatio);
+                run.End();
+            }
+            else if (IsKnown(day, limits))
+            {
+                run.Read(day.Date, day, Raises(day, limits), day.RatioUncoupled >= Math.Min(limits.Return, limits.Raise));
             }
 
-            if (since is { } start && read is not null)
+            if (run is { Since: { } since, Reading: { } read })
             {
-                yield return Find(person, day.Date, start, read, limits.LoadRatio, subject.LoadUnit);
+                yield return Find(series, day.Date, since, read, limits);
             }
         }
     }
 
     private static bool IsKnown(Day day, LoadRatioLimits limits) =>
-        day.RatioUncoupled.HasValue && Known(day.Coverage7, 7) >= limits.CoveredOf7 && Known(day.Coverage28, 28) >= limits.CoveredOf28;
+        day is { Load: not null, RatioUncoupled: not null } && Known(day.Coverage7, 7) >= limits.CoveredOf7 && Known(day.Coverage28, 28) >= limits.CoveredOf28;
 
     private static double Known(double coverage, int days) => Math.Round(coverage * days);
-
-    private static LocalDate? Since(LocalDate? since, Day day, LoadRatioLimits limits)
-    {
-        var holds = since is null ? Raises(day, limits) : day.RatioUncoupled >= Math.Min(limits.Return, limits.Raise);
-        return holds ? since ?? day.Date : null;
-    }
 
     private static bool Raises(Day day, LoadRatioLimits limits) =>
         day.RatioUncoupled >= limits.Raise
         && day.DaysSinceFirstCovered >= limits.HistoryDays
         && day.Chronic > Significant.Round(limits.ChronicShareOfMedian * day.ChronicMedian);
 
-    private Finding Find(Person person, LocalDate date, LocalDate since, Day read, LoadRatioLimits limits, string loadUnit) => new(
-        person.Id,
+    private Finding Find(WatchedSeries series, LocalDate date, LocalDate since, Day read, LoadRatioLimits limits) => new(
+        series.Person.Id,
         date,
         Name,
         Region: null,
@@ -65,16 +66,18 @@ public sealed class LoadRatioRule : IRule
         read.RatioUncoupled!.Value,
         limits.Raise,
         "ratio",
-        Sentence(date, since, read, limits, loadUnit),
-        Basis(read, limits, loadUnit));
-
-    private static string Sentence(LocalDate date, LocalDate since, Day read, LoadRatioLimits limits, string loadUnit)
+        Sentence(series, date, since, read, limits),
+        Basis(read, limits, series.Unit))
     {
-        var (ratio, held) = (read.RatioUncoupled!.Value, read.Date != date);
-        var what = $"Load of the last 7 days {(held ? "was" : "is")} {Wording.Ratio(ratio, limits.Raise)} times the usual week "
-            + $"({Wording.Number(read.Acute!.Value)} against {Wording.Number(read.ChronicBefore!.Value)} {loadUnit})";
-        var when = held ? $" on {Wording.Date(read.Date, date)}, not known since" : "";
-        return $"{what}{when}{Against(ratio, Wording.Date(since, date), limits)}.";
+        Quantity = series.Quantity,
+    };
+
+    private static string Sentence(WatchedSeries series, LocalDate date, LocalDate since, Day read, LoadRatioLimits limits)
+    {
+        var ratio = read.RatioUncoupled!.Value;
+        var what = $"{series.Heading} of the last 7 days {Wording.Is(read.Date, date)} {Wording.Ratio(ratio, limits.Raise)} times the usual week "
+            + $"({Wording.Number(read.Acute!.Value)} against {Wording.Number(read.ChronicBefore!.Value)} {series.Unit})";
+        return $"{what}{Wording.NotKnownSince(read.Date, date)}{Against(ratio, Wording.Date(since, date), limits)}.";
     }
 
     private static string Against(double ratio, string since, LoadRatioLimits limits) => ratio.CompareTo(limits.Raise) switch

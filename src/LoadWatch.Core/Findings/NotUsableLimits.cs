@@ -5,6 +5,7 @@ namespace LoadWatch.Findings;
 /// <summary>Limits of the rule <c>not_usable</c>: recordings came, but too little of them can be used. All a choice.</summary>
 public sealed record NotUsableLimits
 {
+    /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;
 
     /// <summary>Sessions that raise a notice. Count.</summary>

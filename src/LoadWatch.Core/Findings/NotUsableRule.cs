@@ -13,10 +13,12 @@ public sealed class NotUsableRule : IRule
 
     public string Name => "not_usable";
 
+    public bool IsEnabled(RuleLimits limits) => limits.NotUsable.Enabled;
+
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var limits = subject.Limits.NotUsable;
-        var useless = limits.Enabled ? Useless(subject, limits.UsableShare) : [];
+        var useless = Useless(subject, limits.UsableShare);
         LocalDate? since = null;
         foreach (var day in useless.Count == 0 ? [] : subject.Days)
         {

@@ -1,5 +1,6 @@
 using LoadWatch.Activities;
 using LoadWatch.Days;
+using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Plans;
 using LoadWatch.Rows;
@@ -14,6 +15,9 @@ public sealed record RuleSubject(Person Person, IReadOnlyList<Day> Days, RuleLim
 {
     /// <summary>Unit of the group's load, for texts and evidence.</summary>
     public string LoadUnit { get; init; } = LoadRatioRule.ArbitraryUnits;
+
+    /// <summary>Name of the quantity that is the group's load: what it is of a single session.</summary>
+    public string LoadQuantity { get; init; } = QuantityNames.BanisterTrimp;
 
     /// <summary>What counts of the person's training up to the last day, by date, then key.</summary>
     public IReadOnlyList<JoinedActivity> Activities { get; init; } = [];

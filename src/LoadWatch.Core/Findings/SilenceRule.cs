@@ -12,6 +12,8 @@ public sealed class SilenceRule : IRule
 {
     public string Name => "silence";
 
+    public bool IsEnabled(RuleLimits limits) => limits.Silence.Enabled;
+
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var (person, days, limits) = subject;

@@ -16,6 +16,8 @@ public sealed class StimulusGapRule : IRule
 
     public string Name => "stimulus_gap";
 
+    public bool IsEnabled(RuleLimits limits) => limits.StimulusGap.Enabled;
+
     public IEnumerable<Finding> Evaluate(RuleSubject subject) =>
         Regions.SelectMany(region => Evaluate(subject.Person, region, subject.Days, subject.Limits.StimulusGap)).OrderBy(finding => finding.Date);
 

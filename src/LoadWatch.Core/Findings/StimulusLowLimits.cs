@@ -5,6 +5,7 @@ namespace LoadWatch.Findings;
 /// <summary>Limits of the rule <c>stimulus_low</c>: too few heavy-or-fast days of a body region in 14 days. All a choice.</summary>
 public sealed record StimulusLowLimits
 {
+    /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;
 
     /// <summary>Share of the person's usual heavy-or-fast days in 14 days; fewer raise a notice. 0 to 1.</summary>

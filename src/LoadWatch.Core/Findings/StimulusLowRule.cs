@@ -22,9 +22,10 @@ public sealed class StimulusLowRule : IRule
 
     public string Name => "stimulus_low";
 
-    public IEnumerable<Finding> Evaluate(RuleSubject subject) => subject.Limits.StimulusLow.Enabled
-        ? Regions.SelectMany(region => Evaluate(subject, region)).OrderBy(finding => finding.Date)
-        : [];
+    public bool IsEnabled(RuleLimits limits) => limits.StimulusLow.Enabled;
+
+    public IEnumerable<Finding> Evaluate(RuleSubject subject) =>
+        Regions.SelectMany(region => Evaluate(subject, region)).OrderBy(finding => finding.Date);
 
     private IEnumerable<Finding> Evaluate(RuleSubject subject, BodyRegion region)
     {

@@ -36,4 +36,22 @@ internal static class Wording
     }
 
     public static string Limit(double limit) => limit.ToString("0.0#", CultureInfo.InvariantCulture);
+
+    /// <summary><c>44 %</c> of 0.44, with a decimal where a whole number would hide the difference from the limit.</summary>
+    public static string Percent(double fraction, double limit)
+    {
+        var hidden = fraction != limit && Math.Round(100 * fraction) == Math.Round(100 * limit);
+        return (100 * fraction).ToString(hidden ? "0.0" : "0", CultureInfo.InvariantCulture) + " %";
+    }
+
+    /// <summary><c>40 %</c>, <c>12.5 %</c>.</summary>
+    public static string Percent(double limit) => (100 * limit).ToString("0.##", CultureInfo.InvariantCulture) + " %";
+
+    public static string Capital(string text) => char.ToUpperInvariant(text[0]) + text[1..];
+
+    /// <summary>The verb of a reading of another date.</summary>
+    public static string Is(LocalDate read, LocalDate told) => read == told ? "is" : "was";
+
+    /// <summary><c> on 2 March, not known since</c> for a reading of another date, else nothing.</summary>
+    public static string NotKnownSince(LocalDate read, LocalDate told) => read == told ? "" : $" on {Date(read, told)}, not known since";
 }

@@ -1,6 +1,7 @@
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
 using LoadWatch.People;
+using LoadWatch.Plans;
 using NodaTime;
 
 namespace LoadWatch.Notices;
@@ -45,14 +46,27 @@ public static class BriefBuilder
         .ThenBy(news => RuleTexts.Order(news.Alert.Key.Rule))
         .ThenBy(news => news.Alert.Id, StringComparer.Ordinal);
 
-    /// <summary>The name to show: the person's own, or "You".</summary>
-    internal static string NameOf(Person person, bool self) => self ? "You" : OneLine.Of(person.Name);
+    /// <summary>The name to show: the person's own, or "You"; the id for a name of which nothing can be shown.</summary>
+    internal static string NameOf(Person person, bool self) => (self, OneLine.Of(person.Name)) switch
+    {
+        (true, _) => "You",
+        (_, "") => person.Id,
+        (_, var name) => name,
+    };
 
     /// <summary>An acknowledged alert asks for nothing more; it stays beside one that does, and in the group's table.</summary>
     internal static bool ToLookAt(BriefSubject subject) =>
         subject.Alerts.Any(news => IsActive(news) && (news.IsNew || news.Alert.State == AlertState.Unacknowledged));
 
-    private static List<BriefSubject> Shown(Contact contact, IReadOnlyList<BriefSubject> subjects) =>
+    /// <summary>The contact's people, each with the alerts that may be told to a reader of this role.</summary>
+    private static List<BriefSubject> Shown(Contact contact, IReadOnlyList<BriefSubject> subjects)
+    {
+        var people = PeopleOf(contact, subjects);
+        var view = RoleView.Of(contact.Role, people.Count);
+        return [.. people.Select(subject => subject with { Alerts = [.. subject.Alerts.Where(news => view.ShowsRule(news.Alert.Key.Rule))] })];
+    }
+
+    private static List<BriefSubject> PeopleOf(Contact contact, IReadOnlyList<BriefSubject> subjects) =>
     [
         .. subjects
             .Where(subject => contact.People.Count > 0
@@ -83,9 +97,11 @@ public static class BriefBuilder
         .Where(news => news.ReturnedSince && !IsActive(news))
         .OrderBy(news => RuleTexts.Order(news.Alert.Key.Rule))
         .ThenBy(news => news.Alert.Id, StringComparer.Ordinal)
-        .Select(news => RuleTexts.Returned(news, subject.Group.Limits, self))
+        .Select(news => RuleTexts.Returned(news, subject.Group.Limits, PlanOf(subject), self))
         .Distinct(StringComparer.Ordinal)
         .Select(sentence => new BriefLine(NameOf(subject.Person, self), OneLine.Sentence(sentence)));
+
+    private static DayPlan PlanOf(BriefSubject subject) => subject.Days.Count == 0 ? DayPlan.None : subject.Days[^1].Plan;
 
     private static IReadOnlyList<BriefGroup> Groups(Contact contact, List<BriefSubject> shown, LocalDate upTo, bool self) =>
     [

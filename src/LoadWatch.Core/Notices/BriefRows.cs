@@ -21,19 +21,20 @@ internal static class BriefRows
         var today = days.GetValueOrDefault(upTo);
         var legs = today?.Regions.GetValueOrDefault(BodyRegion.Legs);
         var known = Enumerable.Range(0, WeekDays).Count(back => days.GetValueOrDefault(upTo.PlusDays(-back))?.Load is not null);
+        var back = ReturnPhase.Of(subject, today);
         return new BriefRow(
             subject.Person.Id,
             BriefBuilder.NameOf(subject.Person, self),
             BriefBuilder.ToLookAt(subject),
             subject.Days.Where(day => day.State == DayState.Recorded).Max(day => (LocalDate?)day.Date),
             today?.Acute,
-            today?.ChronicBefore,
-            today?.RatioUncoupled,
+            back is null ? today?.ChronicBefore : back.UsualWeek,
+            back is null ? today?.RatioUncoupled : null,
             known,
             EverHeavy(days, upTo, legs) ? legs?.DaysSince : null,
             legs?.Days28,
             [.. Enumerable.Range(1 - StripDays, StripDays).Select(offset => Strip(days, upTo.PlusDays(offset)))],
-            Remark(subject, today, known, NeverHeavy(days, upTo, legs)));
+            Remark(subject, today, back, known, NeverHeavy(days, upTo, legs)));
     }
 
     private static BriefDay Strip(Dictionary<LocalDate, Day> days, LocalDate date)
@@ -60,18 +61,23 @@ internal static class BriefRows
         return start.Regions.GetValueOrDefault(BodyRegion.Legs)?.HeavyOrFast == true ? null : since;
     }
 
-    private static string? Remark(BriefSubject subject, Day? today, int knownOf7, int? neverHeavyDays)
+    private static string? Remark(BriefSubject subject, Day? today, ReturnPhase? back, int knownOf7, int? neverHeavyDays)
     {
         var given = subject.Remarks.Select(OneLine.Of).Where(remark => remark.Length > 0).Distinct(StringComparer.Ordinal).ToList();
-        var all = Own(subject, today, knownOf7, neverHeavyDays)
+        var all = Own(subject, today, back, knownOf7, neverHeavyDays)
             .Concat(given.Take(RemarksShown))
             .Concat(given.Count > RemarksShown ? [$"{given.Count - RemarksShown} more of the kind"] : Array.Empty<string>());
         var remark = string.Join("; ", all);
         return remark.Length == 0 ? null : remark;
     }
 
-    private static IEnumerable<string> Own(BriefSubject subject, Day? today, int knownOf7, int? neverHeavyDays)
+    private static IEnumerable<string> Own(BriefSubject subject, Day? today, ReturnPhase? back, int knownOf7, int? neverHeavyDays)
     {
+        if (back is not null)
+        {
+            yield return back.Remark;
+        }
+
         foreach (var news in BriefBuilder.ToLookAt(subject) ? [] : BriefBuilder.Active(subject))
         {
             yield return $"seen before and still standing: {RuleTexts.Named(news.Alert.Key, self: false)}";
@@ -93,7 +99,7 @@ internal static class BriefRows
             yield return $"load known on {knownOf7} of the last 7 days, 5 wanted";
         }
 
-        if (today?.ChronicBefore is null)
+        if (today?.ChronicBefore is null && back is null)
         {
             yield return "too few known days for a usual week";
         }

@@ -1,27 +1,64 @@
 using LoadWatch.Findings;
+using LoadWatch.Loads;
 
 namespace LoadWatch.Service.Configuration;
 
-/// <summary>Finds limits that contradict each other although each is in its range.</summary>
+/// <summary>Finds limits that contradict each other although each is in its range, and names of quantities that cannot be.</summary>
 public static class LimitsCheck
 {
+    private const int LongestName = 60;
+
     /// <summary>Pairs of path below the limits (<c>load_ratio.return</c>) and reason.</summary>
-    public static IEnumerable<(string Path, string Reason)> Faults(RuleLimits limits)
+    public static IEnumerable<(string Path, string Reason)> Faults(RuleLimits limits) =>
+        Pairs(limits).Where(pair => pair.Low > pair.High).Select(pair => (pair.Path, pair.Reason))
+            .Concat(Names("load_ratio", limits.LoadRatio.Quantities))
+            .Concat(Names("weekly_jump", limits.WeeklyJump.Quantities))
+            .Concat(Names("falling_load", limits.FallingLoad.Quantities));
+
+    private static IEnumerable<Pair> Pairs(RuleLimits limits) =>
+    [
+        AtMost("load_ratio.return", limits.LoadRatio.Return, "raise", limits.LoadRatio.Raise),
+        AtMost("weekly_jump.return", limits.WeeklyJump.Return, "raise", limits.WeeklyJump.Raise),
+        AtMost("weekly_jump.weeks", limits.WeeklyJump.Weeks, "look_back_weeks", limits.WeeklyJump.LookBackWeeks),
+        AtLeast("session_spike.run_warning", limits.SessionSpike.RunWarning, "run_notice", limits.SessionSpike.RunNotice),
+        AtLeast("session_spike.load_warning", limits.SessionSpike.LoadWarning, "load_notice", limits.SessionSpike.LoadNotice),
+        AtMost("monotony.return", limits.Monotony.Return, "raise", limits.Monotony.Raise),
+        AtMost("monotony.strains_wanted", limits.Monotony.StrainsWanted, "look_back_days", limits.Monotony.LookBackDays),
+        AtMost("hard_days.training_days_wanted", limits.HardDays.TrainingDaysWanted, "look_back_days", limits.HardDays.LookBackDays),
+        AtMost("hard_days.matches", limits.HardDays.Matches, "match_days", limits.HardDays.MatchDays),
+        AtMost("falling_load.warning", limits.FallingLoad.Warning, "notice", limits.FallingLoad.Notice),
+        AtLeast("falling_load.return", limits.FallingLoad.Return, "notice", limits.FallingLoad.Notice),
+        AtMost("falling_load.weeks_wanted", limits.FallingLoad.WeeksWanted, "weeks", limits.FallingLoad.Weeks),
+        AtLeast("stimulus_gap.warning_days", limits.StimulusGap.WarningDays, "notice_days", limits.StimulusGap.NoticeDays),
+        new("silence.gaps_wanted", limits.Silence.GapsWanted, limits.Silence.LookBackDays, FormattableString.Invariant(
+            $"{limits.Silence.GapsWanted} gaps never fit in look_back_days, which is {limits.Silence.LookBackDays}")),
+    ];
+
+    private static Pair AtMost(string path, double value, string other, double bound) =>
+        new(path, value, bound, FormattableString.Invariant($"{value} is above {other}, which is {bound}"));
+
+    private static Pair AtLeast(string path, double value, string other, double bound) =>
+        new(path, bound, value, FormattableString.Invariant($"{value} is below {other}, which is {bound}"));
+
+    private static IEnumerable<(string Path, string Reason)> Names(string rule, IReadOnlyList<string> quantities)
     {
-        if (limits.LoadRatio is { } ratio && ratio.Return > ratio.Raise)
+        foreach (var (name, place) in quantities.Select((name, place) => (name, place)))
         {
-            yield return ("load_ratio.return", FormattableString.Invariant($"{ratio.Return} is above raise, which is {ratio.Raise}"));
-        }
-
-        if (limits.StimulusGap is { } gap && gap.WarningDays < gap.NoticeDays)
-        {
-            yield return ("stimulus_gap.warning_days", FormattableString.Invariant($"{gap.WarningDays} is below notice_days, which is {gap.NoticeDays}"));
-        }
-
-        if (limits.Silence is { } silence && silence.GapsWanted > silence.LookBackDays)
-        {
-            yield return ("silence.gaps_wanted", FormattableString.Invariant(
-                $"{silence.GapsWanted} gaps never fit in look_back_days, which is {silence.LookBackDays}"));
+            var reason = name == QuantityNames.SpeedTop ? "is no load: a day's sum of it would mean nothing"
+                : IsName(name) ? null
+                : "is not the name of a quantity: a small letter, then small letters, digits and _, 60 at most";
+            if (reason is not null)
+            {
+                yield return ($"{rule}.quantities[{place}]", $"\"{name}\" {reason}");
+            }
         }
     }
+
+    private static bool IsName(string name) =>
+        name.Length is > 0 and <= LongestName
+        && char.IsAsciiLetterLower(name[0])
+        && name.All(letter => char.IsAsciiLetterLower(letter) || char.IsAsciiDigit(letter) || letter == '_');
+
+    /// <summary>Two limits of which the first may not exceed the second.</summary>
+    private sealed record Pair(string Path, double Low, double High, string Reason);
 }

@@ -30,6 +30,7 @@ public static class ValueCheck
     private static (bool Fits, string Wanted) Judge(JsonElement element, Type type) => type switch
     {
         { IsEnum: true } => (IsOneOf(element, WordsOf(type)), $"one of {string.Join(", ", WordsOf(type))}"),
+        _ when type == typeof(bool) => (element.ValueKind is JsonValueKind.True or JsonValueKind.False, "true or false"),
         _ when type == typeof(int) => (element.ValueKind == JsonValueKind.Number && element.TryGetInt32(out _), "a whole number"),
         _ when type == typeof(double) => (IsFinite(element), "a number"),
         _ when type == typeof(char) => (element.ValueKind == JsonValueKind.String && element.GetString()!.Length == 1, "one character in quotes"),

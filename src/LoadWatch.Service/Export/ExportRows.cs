@@ -30,7 +30,8 @@ public sealed record StimulusLine(
 
 public sealed record ActivityLine(
     string Person,
-    string Start,
+    string Date,
+    string? Start,
     string Sport,
     double? ElapsedS,
     double? TimerS,
@@ -44,6 +45,8 @@ public sealed record ActivityLine(
     IReadOnlyDictionary<string, double> UsableShare,
     IReadOnlyList<StimulusLine> Stimulus,
     IReadOnlyList<RecordingLine> Recordings,
+    IReadOnlyList<string> Tables,
+    bool AddsLoad,
     IReadOnlyList<string> Remarks);
 
 public sealed record DayLine(
@@ -66,7 +69,8 @@ public sealed record DayLine(
     [property: JsonPropertyName("heavy_or_fast_28")] IReadOnlyDictionary<string, int?> HeavyOrFast28,
     IReadOnlyDictionary<string, int?> DaysSinceHeavyOrFast);
 
-public sealed record FindingLine(string Person, string Rule, string? Region, string Date, string Severity, double Value, double Limit, string Unit);
+public sealed record FindingLine(
+    string Person, string Rule, string? Region, string? Quantity, string Date, string Severity, double Value, double Limit, string Unit);
 
 public sealed record AlertLine(
-    string Id, string Person, string Rule, string? Region, string Raised, string State, string Severity, string? ShelvedUntil, string Text);
+    string Id, string Person, string Rule, string? Region, string? Quantity, string Raised, string State, string Severity, string? ShelvedUntil, string Text);

@@ -1,6 +1,7 @@
 using LoadWatch.Activities;
 using LoadWatch.Recordings;
 using LoadWatch.Rows;
+using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
 
@@ -11,6 +12,12 @@ public sealed record DecodedArrival(string Sha, string Kind, ArrivalVerdict Verd
 {
     /// <summary>Where stored and a table: what it holds. Its rows are taken up once everything of the group is settled (<see cref="Tables"/>).</summary>
     public DecodedTable? Table { get; init; }
+
+    /// <summary>What staff would have to say so that all of it counts.</summary>
+    public IReadOnlyList<string> Questions { get; init; } = [];
+
+    /// <summary>The first date (UTC) that questions are about; null without any.</summary>
+    public LocalDate? From { get; init; }
 }
 
 public sealed record ComputedRecording(RecordingSummary Summary, ActivityValues Values);

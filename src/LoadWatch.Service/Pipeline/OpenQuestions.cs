@@ -20,9 +20,16 @@ public sealed class OpenQuestions(WorkingConfiguration configuration)
         var from = today.PlusDays(-DaysBack);
         return session.Questions.Since(from)
             .Where(question => people.ContainsKey(question.Person))
-            .Select(question => new BriefLine(people[question.Person].Name, question.Sentence))
-            .Concat(contact.People.Count > 0 ? [] : OfNobody(session, from));
+            .GroupBy(question => question.Sentence, StringComparer.Ordinal)
+            .Select(same => new BriefLine(Named([.. same.Select(question => people[question.Person].Name).Distinct(StringComparer.Ordinal)]), same.Key))
+            .Concat(contact.People.Count > 0 ? [] : [.. OfContents(session, from), .. OfNobody(session, from)]);
     }
+
+    /// <summary>What several people leave open alike is asked once.</summary>
+    private static string Named(IReadOnlyList<string> names) => names.Count == 1 ? names[0] : $"{names.Count} people";
+
+    private static IEnumerable<BriefLine> OfContents(StoreSession session, LocalDate from) => session.Questions.OfContentsSince(from)
+        .Select(question => new BriefLine(session.Sightings.Of(question.Sha)[0].Path, question.Sentence));
 
     private IEnumerable<BriefLine> OfNobody(StoreSession session, LocalDate from) => session.TableRows.OfNobody()
         .Concat(session.TableRows.OfKind(RowKind.Plan).Where(IsOfNobody))

@@ -43,7 +43,7 @@ public sealed class PersonPlans(WorkingConfiguration configuration)
         ? [""]
         : (configuration.Subjects.Of(row) ?? []).Select(person => person.Id);
 
-    private static PlanEntry Entry(StoredRow row)
+    internal static PlanEntry Entry(StoredRow row)
     {
         var plan = (PlanRow)row.Content;
         return new PlanEntry(plan.Word, row.Date, LastDate(row.Date, plan.Until), plan.Start, plan.End, plan.RecordingExpected, plan.Sport);

@@ -18,7 +18,7 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
     public void Settle(IReadOnlyList<SeenContent> seen, bool force, IReadOnlyList<Sighting> gone, Action<StoreSession> alongside)
     {
         var pending = store.Read(session => Pending(session, seen, force, gone));
-        var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims)).ToList();
+        var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims, item.IsDecided)).ToList();
         var before = pending.ToDictionary(item => item.Content.Sha, item => item.Before, StringComparer.Ordinal);
         KillPoint.Pass("decoded");
         store.Write(session =>
@@ -42,7 +42,7 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
     }
 
     /// <summary>Contents that are new, or whose owner is told differently now, each once.</summary>
-    private List<(ArrivalContent Content, IReadOnlyList<string> Claims, ArrivalState? Before)> Pending(
+    private List<(ArrivalContent Content, IReadOnlyList<string> Claims, bool IsDecided, ArrivalState? Before)> Pending(
         StoreSession session, IReadOnlyList<SeenContent> seen, bool force, IReadOnlyList<Sighting> gone)
     {
         var decided = session.Decisions.Assigned();
@@ -57,7 +57,7 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
                 return (same.First().Content, Claims: Attribution.Claims(decided.GetValueOrDefault(same.Key)?.Person, names, configuration), Arrival: session.Arrivals.Get(same.Key));
             })
             .Where(item => force || IsPending(item.Arrival, item.Content, item.Claims))
-            .Select(item => (item.Content, item.Claims, item.Arrival?.State))
+            .Select(item => (item.Content, item.Claims, decided.ContainsKey(item.Content.Sha), item.Arrival?.State))
             .ToList();
     }
 

@@ -23,6 +23,8 @@ public sealed class Sweep
     private readonly Answers answers;
     private readonly AssignedFiles assigned;
     private readonly Tables tables;
+    private readonly Recomputations recomputations;
+    private readonly ArrivalDecoder decoder;
     private readonly Briefs briefs;
     private readonly ArchiveReader reader;
 
@@ -33,7 +35,7 @@ public sealed class Sweep
         this.now = now;
         archive = new Archive(folder);
         var decoders = new DecoderSet(configuration.Layouts);
-        var decoder = new ArrivalDecoder(configuration, decoders, archive, now);
+        decoder = new ArrivalDecoder(configuration, decoders, archive, now);
         reader = new ArchiveReader(store, archive, decoders);
         settlement = new Settlement(configuration, store, decoder, Report);
         intake = new Intake(configuration, store, archive, decoders, settlement, now, Report);
@@ -42,6 +44,7 @@ public sealed class Sweep
         answers = new Answers(configuration, store, now);
         assigned = new AssignedFiles(configuration, store, archive, reader, settlement, Report);
         tables = new Tables(configuration, store, decoder, Report);
+        recomputations = new Recomputations(store, archive, reader, settlement);
         briefs = new Briefs(configuration, now, Report.Unreadable);
     }
 
@@ -55,14 +58,15 @@ public sealed class Sweep
     public SweepReport Run(CancellationToken cancel = default)
     {
         AdoptConfiguration(cancel);
+        decoder.Basis = store.Read(session => TableBasis.Of(configuration, session));
         recovery.Run(cancel);
         Inboxes.MakePersonFolders(configuration);
         InboxRemoval.PutBack(configuration);
         intake.TakeIn(Inboxes.Changed(configuration, store, Report), cancel);
         moved.TakeUp();
+        TakeUpTables(cancel);
         Report.Take(answers.TakeUp());
         assigned.TakeUp(cancel);
-        tables.TakeUp(cancel);
         Evaluate(cancel);
         Report.InAll = store.Read(session => session.Arrivals.CountByState());
         return Report;
@@ -85,7 +89,7 @@ public sealed class Sweep
             settlement.Settle(piece, force: true);
         }
 
-        tables.TakeUp(cancel);
+        TakeUpTables(cancel);
         new DayUpdate(configuration, store, now, Report) { Through = through }.Run(cancel);
         store.Write(session => session.Derived.SetConfigHash(Basis));
         return Report;
@@ -101,6 +105,14 @@ public sealed class Sweep
         session.Derived.Empty();
         session.Derived.SetConfigHash("");
         return through;
+    }
+
+    /// <summary>Rows first, then the recordings that they bear on.</summary>
+    private void TakeUpTables(CancellationToken cancel)
+    {
+        tables.TakeUp(cancel);
+        decoder.Basis = store.Read(session => TableBasis.Of(configuration, session));
+        recomputations.Run(cancel);
     }
 
     private IEnumerable<SeenContent> Kept(string objectSha, Action whenDone)

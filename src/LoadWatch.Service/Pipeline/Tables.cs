@@ -3,12 +3,13 @@ using LoadWatch.Rows;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Rows;
+using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
 
 /// <summary>
 /// Brings the rows of every table in line with its versions. Compares what was seen with what was applied, so it needs no mark of what is left to do: a kill
-/// between the two is caught up by the next sweep. A new version is put on top of the rows; anything else replays all versions in their order (I-5).
+/// between the two is caught up by the next sweep. Recordings that the rows bear on are asked to be computed again in the same commit. A new version is put on top of the rows; anything else replays all versions in their order (I-5).
 /// </summary>
 public sealed class Tables(WorkingConfiguration configuration, Store store, ArrivalDecoder decoder, SweepReport report)
 {
@@ -67,19 +68,14 @@ public sealed class Tables(WorkingConfiguration configuration, Store store, Arri
         session.TableRows.Put(said);
         foreach (var row in gone.Concat(said))
         {
-            foreach (var person in Concerned(row))
+            foreach (var person in TableBasis.Concerned(configuration, row))
             {
                 session.People.MarkDirty(person, row.Date);
+                if (TableBasis.Matters(row))
+                {
+                    session.Recomputations.Ask(person, row.Date, row.Content is PlanRow plan ? plan.Until ?? row.Date : LocalDate.MaxIsoValue);
+                }
             }
         }
     }
-
-    /// <summary>A plan concerns its person, the people of its group, or everybody; answers have their effect as decisions.</summary>
-    private IEnumerable<string> Concerned(StoredRow row) => row switch
-    {
-        { Person: { } person } => [person],
-        { Kind: RowKind.Plan, Subject: "" } => configuration.People.Values.Select(person => person.Id),
-        { Kind: RowKind.Plan } => (configuration.Subjects.Of(row) ?? []).Select(person => person.Id),
-        _ => [],
-    };
 }

@@ -24,6 +24,8 @@ public sealed class DerivedRows
         "DELETE FROM table_version",
         "DELETE FROM table_content",
         "DELETE FROM question",
+        "DELETE FROM content_question",
+        "DELETE FROM recomputation",
         "DELETE FROM derived_state",
     ];
 

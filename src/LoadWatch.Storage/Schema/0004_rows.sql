@@ -34,6 +34,20 @@ CREATE TABLE question (
     PRIMARY KEY (person, date, sentence)
 )
 ;
+CREATE TABLE content_question (
+    sha TEXT NOT NULL REFERENCES arrival (sha),
+    date TEXT NOT NULL,
+    sentence TEXT NOT NULL,
+    PRIMARY KEY (sha, sentence)
+)
+;
+CREATE TABLE recomputation (
+    person TEXT NOT NULL,
+    from_date TEXT NOT NULL,
+    to_date TEXT NOT NULL,
+    PRIMARY KEY (person, from_date, to_date)
+)
+;
 CREATE INDEX table_row_person ON table_row (person, kind, date)
 ;
 CREATE INDEX table_row_kind ON table_row (kind, date)

@@ -1,5 +1,6 @@
 using LoadWatch.Days;
 using LoadWatch.Findings;
+using LoadWatch.Plans;
 using static LoadWatch.Tests.Days.Training;
 using static LoadWatch.Tests.Findings.Watched;
 
@@ -34,6 +35,45 @@ public class LoadRatioRuleTests
 
         Assert.Equal([On(0), On(1), On(2)], found.Select(finding => finding.Date));
         Assert.All(found, finding => Assert.Equal(1.9, finding.Value));
+    }
+
+    /// <summary>With the day of the last load gone from the week, its scaled rest would lie above the limit.</summary>
+    [Fact]
+    public void ADateOfUnknownLoadIsNotReadHoweverWellItsWeekIsCovered()
+    {
+        Assert.Empty(Rule.Of([Ratio(0, 1.7), Ratio(1, 1.9) with { Load = null }]));
+        Assert.Equal(1.9, Rule.Of([Ratio(0, 1.9), Ratio(1, 1.2) with { Load = null }])[^1].Value);
+    }
+
+    [Theory]
+    [InlineData(AbsenceWord.Away, null)]
+    [InlineData(null, 1)]
+    [InlineData(null, 14)]
+    public void IsOffInAnAbsenceAndAfterTheReturn(AbsenceWord? absence, int? returnDay)
+    {
+        var plan = DayPlan.None with { Absence = absence, ReturnDay = returnDay };
+        var found = Rule.Of([Ratio(0, 1.9), Ratio(1, 2.5) with { Plan = plan }, Ratio(2, 1.7), Ratio(3, 1.8)]);
+
+        Assert.Equal([On(0), On(3)], found.Select(finding => finding.Date));
+        Assert.Equal([On(0), On(3)], found.Select(finding => finding.Since));
+    }
+
+    [Fact]
+    public void QuantitiesAreWatchedBesideTheLoad()
+    {
+        var limits = Defaults with { LoadRatio = new LoadRatioLimits { Quantities = ["sprints", "distance_above_7_m_s", "banister_trimp"] } };
+        var series = new[]
+        {
+            new QuantitySeries("distance_above_7_m_s", "m", Ratios(1.9, 2)),
+            new QuantitySeries("banister_trimp", "AU", Ratios(1.9, 2)),
+            new QuantitySeries("unasked", "m", Ratios(1.9, 2)),
+        }.ToDictionary(one => one.Quantity);
+        Day[] days = [Ratio(0, 1), Ratio(1, 2) with { Plan = DayPlan.None with { ReturnDay = 1 } }];
+        var found = Rule.Evaluate(new RuleSubject(Anna, days, limits) { Series = series }).ToList();
+
+        var finding = Assert.Single(found);
+        Assert.Equal((On(0), "distance_above_7_m_s"), (finding.Date, finding.Quantity));
+        Assert.StartsWith("Distance at 7 m/s and faster of the last 7 days is 1.9 times the usual week (380 against 200 m)", finding.Text, StringComparison.Ordinal);
     }
 
     [Theory]

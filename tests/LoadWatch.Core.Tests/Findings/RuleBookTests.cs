@@ -1,6 +1,8 @@
 using System.ComponentModel.DataAnnotations;
+using CsCheck;
 using LoadWatch.Days;
 using LoadWatch.Findings;
+using NodaTime;
 using static LoadWatch.Tests.Days.Training;
 
 namespace LoadWatch.Tests.Findings;
@@ -8,7 +10,8 @@ namespace LoadWatch.Tests.Findings;
 public class RuleBookTests
 {
     [Fact]
-    public void RulesAreNamedAndInOrder() => Assert.Equal(["load_ratio", "stimulus_gap", "silence"], RuleBook.All.Select(rule => rule.Name));
+    public void RulesAreNamedAndInOrder() => Assert.Equal(
+        ["load_ratio", "weekly_jump", "session_spike", "monotony", "hard_days", "falling_load", "stimulus_gap", "silence"], RuleBook.All.Select(rule => rule.Name));
 
     [Fact]
     public void WithoutDaysThereAreNoFindings() => Assert.Empty(RuleBook.Evaluate(new RuleSubject(Anna, [], Watched.Defaults)));
@@ -19,7 +22,7 @@ public class RuleBookTests
         var found = Busy();
 
         Assert.Equal(found.OrderBy(finding => finding.Date).ThenBy(finding => finding.Rule, StringComparer.Ordinal), found);
-        Assert.Equal(["load_ratio", "silence", "stimulus_gap"], found.Where(finding => finding.Date == On(60)).Select(finding => finding.Rule));
+        Assert.Equal(["hard_days", "load_ratio", "silence", "stimulus_gap", "weekly_jump"], found.Where(finding => finding.Date == On(60)).Select(finding => finding.Rule));
     }
 
     [Fact]
@@ -45,6 +48,77 @@ public class RuleBookTests
         Assert.All(Busy(), finding => Assert.DoesNotContain(word, finding.Text + finding.Evidence.Formula, StringComparison.OrdinalIgnoreCase));
 
     [Fact]
+    public void ARuleThatIsOffSaysNothing()
+    {
+        Assert.Contains(Busy(), finding => finding.Rule == "load_ratio");
+        var off = Watched.Defaults with { LoadRatio = new LoadRatioLimits { Enabled = false } };
+
+        Assert.DoesNotContain(RuleBook.Evaluate(new RuleSubject(Anna, BusyDays(), off)), finding => finding.Rule == "load_ratio");
+    }
+
+    [Fact]
+    public void EveryRuleHasItsOwnSwitch()
+    {
+        RuleLimits[] off =
+        [
+            new() { LoadRatio = new() { Enabled = false } },
+            new() { WeeklyJump = new() { Enabled = false } },
+            new() { SessionSpike = new() { Enabled = false } },
+            new() { Monotony = new() { Enabled = false } },
+            new() { HardDays = new() { Enabled = false } },
+            new() { FallingLoad = new() { Enabled = false } },
+            new() { StimulusGap = new() { Enabled = false } },
+            new() { Silence = new() { Enabled = false } },
+        ];
+
+        Assert.All(RuleBook.All, rule => Assert.True(rule.IsEnabled(Watched.Defaults)));
+        Assert.Equal(RuleBook.All.Select(rule => rule.Name), off.Select(limits => Assert.Single(RuleBook.All, rule => !rule.IsEnabled(limits)).Name));
+    }
+
+    [Fact]
+    public void QuantitiesOfAllRulesThatAreOnAreGathered()
+    {
+        var limits = new RuleLimits
+        {
+            LoadRatio = new() { Quantities = ["work", "distance"] },
+            WeeklyJump = new() { Quantities = ["distance", "climb"] },
+            FallingLoad = new() { Quantities = ["minutes"], Enabled = false },
+        };
+
+        Assert.Equal(["climb", "distance", "work"], limits.Quantities);
+        Assert.Empty(Watched.Defaults.Quantities);
+    }
+
+    /// <summary>I-6: whatever stands on the last known date stands as it is over an unknown tail, and nothing else comes up; but for silence, which is about it.</summary>
+    [Fact]
+    public void AnUnknownTailNeitherRaisesNorClears() => Gen.Select(SomeDays, Gen.Int[1, 30]).Sample((days, tail) =>
+    {
+        var (before, after) = (Standing(days, 0), Standing(days, tail));
+
+        return before.SequenceEqual(after);
+    }, iter: 300);
+
+    /// <summary>A day: rest, a session whose load could not be computed, or a session by its load; mostly of one size, so that rules come near their limits.</summary>
+    private static readonly Gen<double?[]> SomeDays = Gen.Frequency(
+        (2, Gen.Const((double?)-1)),
+        (1, Gen.Const((double?)null)),
+        (8, Gen.Double[60, 140].Select(load => (double?)load)),
+        (2, Gen.Double[0, 600].Select(load => (double?)load))).Array[70, 140];
+
+    /// <summary>Keys of the findings on the last date, with the first date of their run.</summary>
+    private static List<(FindingKey, LocalDate)> Standing(double?[] days, int tail)
+    {
+        var sessions = days.Select((load, day) => (load, day)).Where(one => one.load is not -1.0).Select(one => one.day % 3 == 0
+            ? Planned.Run(one.day, 100 * (one.load ?? 50), one.load)
+            : Planned.Ride(one.day, one.load)).ToList();
+        var last = sessions.Count == 0 ? On(0) : sessions[^1].Date.PlusDays(tail);
+        return RuleBook.Evaluate(Planned.Subject(Period.DaysBetween(On(0), last), sessions))
+            .Where(finding => finding.Date == last && finding.Rule != "silence")
+            .Select(finding => (finding.Key, finding.Since))
+            .ToList();
+    }
+
+    [Fact]
     public void TheGroupsUnitIsPassedOn() =>
         Assert.Contains(
             RuleBook.Evaluate(new RuleSubject(Anna, BusyDays(), Watched.Defaults) { LoadUnit = "kJ" }),
@@ -54,7 +128,10 @@ public class RuleBookTests
     public void DefaultLimitsLieInTheirRanges()
     {
         RuleLimits limits = new();
-        object[] parts = [limits.LoadRatio, limits.StimulusGap, limits.Silence];
+        object[] parts =
+        [
+            limits.LoadRatio, limits.WeeklyJump, limits.SessionSpike, limits.Monotony, limits.HardDays, limits.FallingLoad, limits.StimulusGap, limits.Silence,
+        ];
 
         Assert.All(parts, part => Validator.ValidateObject(part, new ValidationContext(part), validateAllProperties: true));
         Assert.True(limits.LoadRatio.Return < limits.LoadRatio.Raise);

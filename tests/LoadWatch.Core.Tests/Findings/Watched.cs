@@ -16,6 +16,7 @@ internal static class Watched
         Person = "anna",
         Date = Training.On(day),
         State = ratio is null ? DayState.Unknown : DayState.Recorded,
+        Load = ratio * 30,
         Acute = ratio * 200,
         Chronic = ratio is null ? null : 250,
         ChronicBefore = ratio is null ? null : 200,

@@ -3,6 +3,7 @@ using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.Notices;
 using LoadWatch.People;
+using LoadWatch.Plans;
 using LoadWatch.Stimulus;
 using NodaTime;
 using static LoadWatch.Tests.MorningExamples;
@@ -280,9 +281,54 @@ public sealed class BriefBuilderTests
     [Fact]
     public void ARuleWithoutATextOfItsOwnIsStillTold()
     {
-        var brief = Build(Subject("a", "Ann", News("a", "weekly_jump", null, Severity.Notice, AlertState.Unacknowledged, "this week is 52 % above the last", true)));
-        Assert.Equal("1 of 1 to look at: 1 with weekly jump.", brief.FirstLine);
+        var brief = Build(Subject("a", "Ann", News("a", "some_new_rule", null, Severity.Notice, AlertState.Unacknowledged, "this week is 52 % above the last", true)));
+        Assert.Equal("1 of 1 to look at: 1 with some new rule.", brief.FirstLine);
         Assert.Equal("This week is 52 % above the last.", brief.Flagged[0].Reasons[0].Sentence);
+    }
+
+    /// <summary>QuietDays: the last 7 days hold 480. Away for 10 days up to the day before the return; the mean week of 28 days on the day before them is told.</summary>
+    [Fact]
+    public void SomebodyReturningIsShownBesideTheUsualBeforeTheBreak()
+    {
+        var row = Build(Returning(3, 10, usual: 430)).Groups[0].Rows[0];
+
+        Assert.Equal("returning, day 3: this week 480 of usually 430 AU before the break", row.Remark);
+        Assert.Equal((480.0, 430.0, null), (row.WeekLoad, row.UsualWeekLoad, row.Ratio));
+    }
+
+    [Fact]
+    public void WhatIsNotKnownOfTheTimeBeforeTheBreakIsNotShown()
+    {
+        Assert.Equal("returning, day 1", Build(Returning(1, 10, usual: null)).Groups[0].Rows[0].Remark);
+        Assert.Equal("returning, day 14", Build(Returning(14, 0, usual: 430)).Groups[0].Rows[0].Remark);
+        var unknownWeek = Returning(2, 10, usual: 430);
+        unknownWeek = unknownWeek with { Days = [.. unknownWeek.Days.Select(day => day with { Acute = null })] };
+        Assert.StartsWith("returning, day 2: usually 430 AU a week before the break; ", Build(unknownWeek).Groups[0].Rows[0].Remark, StringComparison.Ordinal);
+    }
+
+    [Theory]
+    [InlineData("load_ratio", "Load well above the usual: not watched while away or returning.")]
+    [InlineData("weekly_jump", "Load of a week far above the last: not watched while away or returning.")]
+    [InlineData("falling_load", "Load well below the usual: not watched while away or returning.")]
+    [InlineData("stimulus_gap", "Heavy or fast work is back.")]
+    public void ARuleThatIsOffHasNotSeenTheEnd(string rule, string expected)
+    {
+        var over = Over(News("a", rule, null, Severity.Notice, AlertState.Unacknowledged, "as it was", false));
+        Assert.Equal(expected, Assert.Single(Build(Returning(3, 10, usual: 430) with { Alerts = [over] }).Returned).Sentence);
+    }
+
+    /// <summary>On the last day the return is so many days old; before it lies a break of so many days.</summary>
+    private static BriefSubject Returning(int returnDay, int breakDays, double? usual)
+    {
+        var subject = Subject("a", "Ann");
+        var days = subject.Days.Select((day, place) => (day, Back: subject.Days.Count - 1 - place)).Select(one => one.day with
+        {
+            Chronic = one.Back == returnDay + breakDays ? usual : 999,
+            Plan = one.Back < returnDay ? DayPlan.None with { ReturnDay = returnDay - one.Back }
+                : one.Back < returnDay + breakDays ? DayPlan.None with { Absence = AbsenceWord.Ill }
+                : DayPlan.None,
+        });
+        return subject with { Days = [.. days] };
     }
 
     private static Brief Build(params BriefSubject[] subjects) => BriefBuilder.Build(Contact(ContactRole.Coach), Today, subjects, []);

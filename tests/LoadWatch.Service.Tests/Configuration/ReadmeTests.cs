@@ -22,21 +22,46 @@ public sealed class ReadmeTests
     private static readonly string Readme = File.ReadAllText(Repository.Config("README.md")).ReplaceLineEndings("\n");
     private static readonly string[] Lines = Readme.Split('\n');
 
-    public static TheoryData<Type> Limits => [typeof(LoadRatioLimits), typeof(StimulusGapLimits), typeof(SilenceLimits), typeof(IntakeEntry)];
+    /// <summary>The records of numbers with the text in front of the table that explains them.</summary>
+    public static TheoryData<string, Type> Limits
+    {
+        get
+        {
+            var data = new TheoryData<string, Type> { { "## Intake", typeof(IntakeEntry) } };
+            foreach (var rule in typeof(RuleLimits).GetProperties().Where(property => property.Name != nameof(RuleLimits.Quantities)))
+            {
+                data.Add($"**`{KeyOf(rule)}`**", rule.PropertyType);
+            }
+
+            return data;
+        }
+    }
 
     [Theory]
     [MemberData(nameof(Limits))]
-    public void EveryNumberHasARowWithItsDefaultAndItsRange(Type limits)
+    public void EveryLimitHasARowWithItsDefaultAndItsRange(string heading, Type limits)
     {
+        var table = Table(heading);
         foreach (var property in limits.GetProperties())
         {
-            var range = property.GetCustomAttribute<RangeAttribute>()!;
-            var cells = Row(KeyOf(property));
+            var cells = Row(KeyOf(property), table);
 
-            Assert.Equal((property.Name, Invariant(property.GetValue(Activator.CreateInstance(limits)))), (property.Name, cells[1]));
-            Assert.Contains(cells, cell => Regex.IsMatch(cell, $@"^{Invariant(range.Minimum)} to {Invariant(range.Maximum)}($|[,;])"));
+            Assert.Equal((property.Name, Json(property.GetValue(Activator.CreateInstance(limits)))), (property.Name, cells[1]));
+            if (property.GetCustomAttribute<RangeAttribute>() is { } range)
+            {
+                Assert.Contains(cells, cell => Regex.IsMatch(cell, $@"^{Invariant(range.Minimum)} to {Invariant(range.Maximum)}($|[,;])"));
+            }
+            else
+            {
+                Assert.True(property.Name is nameof(LoadRatioLimits.Enabled) or nameof(RuleLimits.Quantities), $"{property.Name} has no range");
+            }
         }
     }
+
+    [Fact]
+    public void EveryRuleHasItsLimitsAndItsTable() =>
+        Assert.Equal(
+            RuleBook.All.Select(rule => $"**`{rule.Name}`**"), Limits.Select(row => row.Data.Item1).Where(heading => heading[0] == '*'));
 
     [Fact]
     public void EveryAnchorHasItsUnitAndItsRange()
@@ -90,6 +115,7 @@ public sealed class ReadmeTests
             .Concat(DefaultRegions.Sports.Keys)
             .Concat(Enum.GetValues<Channel>().Select(Words.Channel))
             .Concat(ValueCheck.WordsOf(typeof(ContactRole)))
+            .Concat(ValueCheck.WordsOf(typeof(NamesShown)))
             .Concat(ValueCheck.WordsOf(typeof(AnchorSource)))
             .Concat(ValueCheck.WordsOf(typeof(ArrivalState)))
             .Concat(ValueCheck.WordsOf(typeof(TakeMode)));
@@ -152,11 +178,20 @@ public sealed class ReadmeTests
 
     private static string Invariant(object? value) => FormattableString.Invariant($"{value}");
 
+    private static string Json(object? value) => JsonSerializer.Serialize(value);
+
     private static bool IsNamed(string word) => Regex.IsMatch(Readme, $@"`([a-z_]+\.)*\.?{Regex.Escape(word)}`");
 
     /// <summary>The cells of the one row whose first cell names the word.</summary>
-    private static string[] Row(string word) =>
-        Assert.Single(Lines.Where(line => line.StartsWith('|')).Select(line => line.Trim('|', ' ').Split(" | ")), cells => cells[0].Contains($"`{word}`", StringComparison.Ordinal));
+    private static string[] Row(string word, IEnumerable<string>? table = null) => Assert.Single(
+        (table ?? Lines).Where(line => line.StartsWith('|')).Select(line => line.Trim('|', ' ').Split(" | ")),
+        cells => cells[0].Contains($"`{word}`", StringComparison.Ordinal));
+
+    /// <summary>The first table after the line that begins so.</summary>
+    private static IEnumerable<string> Table(string heading) => Lines
+        .SkipWhile(line => !line.StartsWith(heading, StringComparison.Ordinal))
+        .SkipWhile(line => !line.StartsWith('|'))
+        .TakeWhile(line => line.StartsWith('|'));
 
     private static string Paragraph(string start) => string.Join(' ', Lines.SkipWhile(line => !line.StartsWith(start, StringComparison.Ordinal))
         .TakeWhile((line, i) => i == 0 || !line.StartsWith("Shipped", StringComparison.Ordinal)).TakeWhile(line => line.Length > 0));

@@ -1,0 +1,39 @@
+using System.ComponentModel.DataAnnotations;
+using System.Text.Json.Serialization;
+
+namespace LoadWatch.Findings;
+
+/// <summary>Limits of the rule <c>falling_load</c>: the usual load is fading. All a choice; 0.34 has a basis in studies of reduced volume.</summary>
+public sealed record FallingLoadLimits
+{
+    /// <summary>Whether the rule is watched at all.</summary>
+    public bool Enabled { get; init; } = true;
+
+    /// <summary>Quantities that are watched beside the group's load, by name: built-in ones, or what a table states.</summary>
+    public IReadOnlyList<string> Quantities { get; init; } = [];
+
+    /// <summary>A notice under this share of the usual week. Share.</summary>
+    [Range(0.1, 0.95)]
+    public double Notice { get; init; } = 0.6;
+
+    /// <summary>A warning under this share of the usual week. Share.</summary>
+    [Range(0.0, 0.95)]
+    public double Warning { get; init; } = 0.34;
+
+    /// <summary>Returns at this share of the usual week or above. Share.</summary>
+    [Range(0.1, 1.0)]
+    public double Return { get; init; } = 0.7;
+
+    /// <summary>Days with known load wanted among the 14. Days.</summary>
+    [Range(10, 14)]
+    [JsonPropertyName("covered_of_14")]
+    public int CoveredOf14 { get; init; } = 10;
+
+    /// <summary>Weeks before those days that make the usual. Weeks.</summary>
+    [Range(4, 12)]
+    public int Weeks { get; init; } = 8;
+
+    /// <summary>Ordinary weeks wanted among them. Weeks.</summary>
+    [Range(3, 12)]
+    public int WeeksWanted { get; init; } = 6;
+}

@@ -1,0 +1,133 @@
+// Mean week of the last 14 days against the median of the 8 weeks before: ratio = (7 x sum of 14 days / known days) / median week, the same as the 14-day sum
+// against twice the median week.
+// Endurance was kept for up to 15 weeks when volume was cut by 33 to 66 % and intensity kept: Spiering, Mujika, Sharp and Foulis 2021, J Strength Cond Res
+// 35:1449-1458. Below 34 % lies outside of what was shown; 60 % and the return value are a choice.
+// Departures: the group's load stands for volume, and intensity is not looked at here.
+using System.Runtime.InteropServices;
+using LoadWatch.Days;
+using NodaTime;
+
+namespace LoadWatch.Findings;
+
+/// <summary>
+/// The usual load is fading. The 14 days are the last ones that plan and answers do not set aside, within 28 days; a date of unknown load, too few known days
+/// or too few ordinary weeks before them leave it as it was (I-6). Off in light weeks, the off-season, absences and after the return.
+/// </summary>
+public sealed class FallingLoadRule : IRule
+{
+    private const int WindowDays = 14;
+    private const int WindowWithin = 28;
+    private const int KnownOf7 = 5;
+
+    public string Name => "falling_load";
+
+    public bool IsEnabled(RuleLimits limits) => limits.FallingLoad.Enabled;
+
+    public IEnumerable<Finding> Evaluate(RuleSubject subject) => WatchedSeries.Of(subject, subject.Limits.FallingLoad.Quantities)
+        .SelectMany(series => Evaluate(series, subject.Limits.FallingLoad))
+        .OrderBy(finding => finding.Date);
+
+    private IEnumerable<Finding> Evaluate(WatchedSeries series, FallingLoadLimits limits)
+    {
+        var run = new FindingRun<Fall>();
+        for (var index = 0; index < series.Days.Count; index++)
+        {
+            var day = series.Days[index];
+            if (day.Plan.IsAwayOrReturning() || day.Plan.IsLight())
+            {
+                run.End();
+            }
+            else if (Read(series.Days, index, limits) is { } fall)
+            {
+                run.Read(day.Date, fall, fall.Ratio < limits.Notice, fall.Ratio < Math.Max(limits.Return, limits.Notice));
+            }
+
+            if (run is { Since: { } since, Reading: { } read })
+            {
+                yield return Find(series, day.Date, since, read, limits);
+            }
+        }
+    }
+
+    private static Fall? Read(IReadOnlyList<Day> days, int index, FallingLoadLimits limits)
+    {
+        var (loads, oldest) = LastDays(days, index);
+        var week = LoadWindow.Of(CollectionsMarshal.AsSpan(loads), 0, WindowDays).MeanWeek(limits.CoveredOf14);
+        if (days[index].Load is null || week is null)
+        {
+            return null;
+        }
+
+        var ordinary = PastWeek.Before(days, oldest - 1, limits.Weeks, KnownOf7).Where(one => one.IsOrdinary).ToList();
+        return ordinary.Count < limits.WeeksWanted || PastWeek.Median(ordinary) is not { } usual
+            ? null
+            : new Fall(days[index].Date, week.Value, loads.Count(load => load.HasValue), usual, ordinary.Count, Significant.Round(week.Value / usual));
+    }
+
+    /// <summary>Loads of the last days that are not set aside, newest first, and the index of the oldest.</summary>
+    private static (List<double?> Loads, int Oldest) LastDays(IReadOnlyList<Day> days, int index)
+    {
+        var (loads, oldest) = (new List<double?>(WindowDays), index);
+        for (var at = index; at >= 0 && at > index - WindowWithin && loads.Count < WindowDays; at--)
+        {
+            if (!days[at].Plan.IsSetAside())
+            {
+                loads.Add(days[at].Load);
+                oldest = at;
+            }
+        }
+
+        return (loads, oldest);
+    }
+
+    private Finding Find(WatchedSeries series, LocalDate date, LocalDate since, Fall read, FallingLoadLimits limits)
+    {
+        var severity = read.Ratio < limits.Warning ? Severity.Warning : Severity.Notice;
+        var limit = severity == Severity.Warning ? limits.Warning : limits.Notice;
+        return new(
+            series.Person.Id,
+            date,
+            Name,
+            Region: null,
+            severity,
+            since,
+            read.Ratio,
+            limit,
+            "ratio",
+            Sentence(series, date, since, read, limit, limits),
+            Basis(read, limits, series.Unit))
+        {
+            Quantity = series.Quantity,
+        };
+    }
+
+    private static string Sentence(WatchedSeries series, LocalDate date, LocalDate since, Fall read, double limit, FallingLoadLimits limits)
+    {
+        var what = $"{series.Heading} of the last 14 days {Wording.Is(read.Date, date)} {Wording.Percent(read.Ratio, limit)} of the usual "
+            + $"({Wording.Number(read.Week)} a week against {Wording.Number(read.Usual)} {series.Unit})";
+        var against = read.Ratio < limit
+            ? $", under the limit of {Wording.Percent(limit)}; low since {Wording.Date(since, date)}"
+            : $"; it passed the limit of {Wording.Percent(limit)} on {Wording.Date(since, date)} and returns at {Wording.Percent(limits.Return)}";
+        return $"{what}{Wording.NotKnownSince(read.Date, date)}{against}.";
+    }
+
+    private static Evidence Basis(Fall read, FallingLoadLimits limits, string unit) => new(
+        "ratio = mean week of the last 14 days that are not set aside, scaled to their known days / median of the ordinary weeks before them",
+        "Spiering, Mujika, Sharp and Foulis 2021, J Strength Cond Res 35:1449-1458 for about a third; the other limits: a choice",
+        [
+            new("ratio", read.Ratio, "ratio", $"on {Wording.IsoDate(read.Date)}"),
+            new("week", read.Week, unit, "mean week of the 14 days"),
+            new("known_of_14", read.Known, "days"),
+            new("usual", read.Usual, unit, "median of the ordinary weeks before"),
+            new("ordinary_weeks", read.Weeks, "count"),
+            new("notice", limits.Notice, "ratio"),
+            new("warning", limits.Warning, "ratio"),
+            new("return", limits.Return, "ratio"),
+            new("covered_of_14_wanted", limits.CoveredOf14, "days"),
+            new("weeks", limits.Weeks, "count"),
+            new("weeks_wanted", limits.WeeksWanted, "count"),
+        ]);
+
+    /// <summary>What a date shows; loads in the series' unit.</summary>
+    private sealed record Fall(LocalDate Date, double Week, int Known, double Usual, int Weeks, double Ratio);
+}

@@ -1,0 +1,74 @@
+// Hard days in a row, and matches close together. A day is hard when its load exceeds the factor x median of the recorded training days of the 8 weeks before it.
+// That crowded calendars deserve attention: Soligard et al. 2016, Br J Sports Med 50:1030-1041. Every number is a choice.
+using LoadWatch.Days;
+using NodaTime;
+
+namespace LoadWatch.Findings;
+
+/// <summary>
+/// Too many hard days in a row, or too many matches in a few days. The row ends with the first day that is known not to be hard; a day of unknown load, or one
+/// with too few training days before it, neither counts nor ends it (I-6). A match counts by plan or answers unless the person was absent or the day is known as
+/// rest; matches are read on known dates only.
+/// </summary>
+public sealed class HardDaysRule : IRule
+{
+    public string Name => "hard_days";
+
+    public bool IsEnabled(RuleLimits limits) => limits.HardDays.Enabled;
+
+    public IEnumerable<Finding> Evaluate(RuleSubject subject)
+    {
+        var limits = subject.Limits.HardDays;
+        var (rows, matches) = (new HardRows(limits), new MatchDensity(limits));
+        LocalDate? since = null;
+        foreach (var day in subject.Days)
+        {
+            rows.Pass(day);
+            matches.Pass(day);
+            since = rows.Standing is null && matches.Standing is null ? null : since ?? day.Date;
+            if (since is { } start)
+            {
+                yield return rows.Standing is { } row ? OfRow(subject, day.Date, start, row) : OfMatches(subject, day.Date, start, matches.Standing!);
+            }
+        }
+    }
+
+    private Finding OfRow(RuleSubject subject, LocalDate date, LocalDate since, HardRow row)
+    {
+        var limits = subject.Limits.HardDays;
+        var between = row.UnknownDays == 0 ? "" : $", {Wording.Days(row.UnknownDays)} of unknown load between them not counted";
+        var text = $"{Wording.Days(row.Days)} in a row up to {Wording.Date(row.UpTo, date)} above {Wording.Limit(limits.MedianFactor)} times the usual training day "
+            + $"({Wording.Number(row.Load)} on the last against {Wording.Number(row.Median)} {subject.LoadUnit}{between}); the limit is {limits.Days}.";
+        return Found(subject, date, since, row.Days, limits.Days, "days", text, new(
+            "days in a row with load > factor x median of the recorded training days before each",
+            "a choice",
+            [
+                new("hard_days", row.Days, "days", $"up to {Wording.IsoDate(row.UpTo)}"),
+                new("unknown_days_between", row.UnknownDays, "days"),
+                new("load", row.Load, subject.LoadUnit, "of the last of them"),
+                new("median_training_day", row.Median, subject.LoadUnit),
+                new("training_days", row.TrainingDays, "days", "that the median rests on"),
+                new("median_factor", limits.MedianFactor, "ratio"),
+                new("days", limits.Days, "days"),
+                new("look_back", limits.LookBackDays, "days"),
+                new("training_days_wanted", limits.TrainingDaysWanted, "days"),
+            ]));
+    }
+
+    private Finding OfMatches(RuleSubject subject, LocalDate date, LocalDate since, MatchCount count)
+    {
+        var limits = subject.Limits.HardDays;
+        var text = $"{count.Matches} matches within {limits.MatchDays} days, the last on {Wording.Date(count.LastMatch, date)}; the limit is {limits.Matches}.";
+        return Found(subject, date, since, count.Matches, limits.Matches, "matches", text, new(
+            "dates with a match by plan or answers within the days up to the date",
+            "a choice",
+            [
+                new("matches", count.Matches, "count", $"up to {Wording.IsoDate(count.Date)}"),
+                new("matches_limit", limits.Matches, "count"),
+                new("match_days", limits.MatchDays, "days"),
+            ]));
+    }
+
+    private Finding Found(RuleSubject subject, LocalDate date, LocalDate since, double value, double limit, string unit, string text, Evidence evidence) =>
+        new(subject.Person.Id, date, Name, Region: null, Severity.Notice, since, value, limit, unit, text, evidence);
+}

@@ -1,0 +1,56 @@
+using LoadWatch.Days;
+using NodaTime;
+
+namespace LoadWatch.Findings;
+
+/// <summary>Hard days in a row. Takes every day in order.</summary>
+internal sealed class HardRows(HardDaysLimits limits)
+{
+    private readonly FindingRun<HardRow> run = new();
+    private readonly Queue<double?> window = [];
+    private readonly RunningMedian training = new();
+    private HardRow? row;
+
+    /// <summary>The row that is long enough and has not ended; null where there is none.</summary>
+    public HardRow? Standing => run.Since is null ? null : run.Reading;
+
+    public void Pass(Day day)
+    {
+        var median = training.Count >= limits.TrainingDaysWanted ? training.Value : null;
+        if (day.Load is { } load && median is { } usual)
+        {
+            Count(day.Date, load, usual);
+        }
+        else
+        {
+            row = Standing is null ? null : row! with { UnknownDays = row.UnknownDays + 1 };
+        }
+
+        Learn(day);
+    }
+
+    private void Count(LocalDate date, double load, double median)
+    {
+        var hard = load > Significant.Round(limits.MedianFactor * median);
+        row = hard ? new HardRow(date, (row?.Days ?? 0) + 1, row?.UnknownDays ?? 0, load, median, training.Count) : null;
+        run.Read(date, row ?? new HardRow(date, 0, 0, load, median, training.Count), row?.Days >= limits.Days, hard);
+    }
+
+    private void Learn(Day day)
+    {
+        var load = day is { State: DayState.Recorded, Load: > 0 } ? day.Load : null;
+        training.Add(load);
+        window.Enqueue(load);
+        if (window.Count > limits.LookBackDays)
+        {
+            training.Remove(window.Dequeue());
+        }
+    }
+}
+
+/// <summary>Hard days in a row as they stood on the last one.</summary>
+/// <param name="Days">Known hard days, count.</param>
+/// <param name="UnknownDays">Days between them of which the load is not known; 0 before the row was long enough, since there they end the count.</param>
+/// <param name="Load">Of the last of them, in the group's unit.</param>
+/// <param name="Median">Load of the median training day, in the group's unit.</param>
+internal sealed record HardRow(LocalDate UpTo, int Days, int UnknownDays, double Load, double Median, int TrainingDays);

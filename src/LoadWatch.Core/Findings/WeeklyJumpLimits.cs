@@ -1,0 +1,43 @@
+using System.ComponentModel.DataAnnotations;
+using System.Text.Json.Serialization;
+
+namespace LoadWatch.Findings;
+
+/// <summary>Limits of the rule <c>weekly_jump</c>: this week far above the last ordinary one. All a choice.</summary>
+public sealed record WeeklyJumpLimits
+{
+    /// <summary>Whether the rule is watched at all.</summary>
+    public bool Enabled { get; init; } = true;
+
+    /// <summary>Quantities that are watched beside the group's load, by name: built-in ones, or what a table states.</summary>
+    public IReadOnlyList<string> Quantities { get; init; } = [];
+
+    /// <summary>Raised when the last 7 days lie this fraction or more above the last ordinary week. Fraction, 0.4 is 40 % more.</summary>
+    [Range(0.05, 5.0)]
+    public double Raise { get; init; } = 0.4;
+
+    /// <summary>Returns below this fraction. Fraction.</summary>
+    [Range(0.0, 5.0)]
+    public double Return { get; init; } = 0.25;
+
+    /// <summary>Raised only when the last 7 days exceed the median of the ordinary weeks before by this factor too. Dimensionless.</summary>
+    [Range(1.0, 5.0)]
+    public double UsualFactor { get; init; } = 1.2;
+
+    /// <summary>Ordinary weeks of that median. Count.</summary>
+    [Range(3, 12)]
+    public int Weeks { get; init; } = 6;
+
+    /// <summary>How far back they are looked for. Weeks.</summary>
+    [Range(3, 52)]
+    public int LookBackWeeks { get; init; } = 16;
+
+    /// <summary>Days with known load wanted in each week. Days.</summary>
+    [Range(5, 7)]
+    [JsonPropertyName("covered_of_7")]
+    public int CoveredOf7 { get; init; } = 5;
+
+    /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. Days.</summary>
+    [Range(1, 7)]
+    public int OnDays { get; init; } = 2;
+}

@@ -1,0 +1,116 @@
+// Rolling week against the last ordinary week: change = (A - B) / B, and A against the median M of ordinary weeks.
+// A: load of the last 7 days, B: load of the newest week before them that is not skipped, M: median of the ordinary weeks (PastWeek).
+// That weekly changes are kept small is advice of Soligard et al. 2016, Br J Sports Med 50:1030-1041 (from memory; the evidence is weak). Every number is a choice.
+// Departure from the plain change of a week: a light week, the off-season, travel, an absence, a return and a week without any load are stepped over, so that
+// a usual week after one of them is no jump; a week of which too little is known is not.
+using LoadWatch.Days;
+using NodaTime;
+
+namespace LoadWatch.Findings;
+
+/// <summary>
+/// The last 7 days are far above the last ordinary week and above the usual. Raised when both hold on enough readable dates in a row, over when the change falls
+/// below the return value. A date of unknown load, weeks of which too little is known, too few ordinary weeks: left as it was (I-6). Off in absences and after the return.
+/// </summary>
+public sealed class WeeklyJumpRule : IRule
+{
+    private const int WeekDays = 7;
+
+    public string Name => "weekly_jump";
+
+    public bool IsEnabled(RuleLimits limits) => limits.WeeklyJump.Enabled;
+
+    public IEnumerable<Finding> Evaluate(RuleSubject subject) => WatchedSeries.Of(subject, subject.Limits.WeeklyJump.Quantities)
+        .SelectMany(series => Evaluate(series, subject.Limits.WeeklyJump))
+        .OrderBy(finding => finding.Date);
+
+    private IEnumerable<Finding> Evaluate(WatchedSeries series, WeeklyJumpLimits limits)
+    {
+        var run = new FindingRun<Jump>(limits.OnDays);
+        for (var index = 0; index < series.Days.Count; index++)
+        {
+            var day = series.Days[index];
+            if (day.Plan.IsAwayOrReturning())
+            {
+                run.End();
+            }
+            else if (Read(series.Days, index, limits) is { } jump)
+            {
+                run.Read(day.Date, jump, Raises(jump, limits), jump.Change >= Math.Min(limits.Return, limits.Raise));
+            }
+
+            if (run is { Since: { } since, Reading: { } read })
+            {
+                yield return Find(series, day.Date, since, read, limits);
+            }
+        }
+    }
+
+    private static Jump? Read(IReadOnlyList<Day> days, int index, WeeklyJumpLimits limits)
+    {
+        var acute = PastWeek.Before(days, index, 1, limits.CoveredOf7).Single().Load;
+        var weeks = PastWeek.Before(days, index - WeekDays, limits.LookBackWeeks, limits.CoveredOf7);
+        var before = weeks.FirstOrDefault(week => !week.IsSkipped);
+        if (days[index].Load is null || acute is null || before.Load is not { } load)
+        {
+            return null;
+        }
+
+        var ordinary = weeks.Where(week => week.IsOrdinary).Take(limits.Weeks).ToList();
+        return ordinary.Count < limits.Weeks
+            ? null
+            : new Jump(days[index].Date, acute.Value, before.UpTo, load, PastWeek.Median(ordinary)!.Value, Significant.Round((acute.Value - load) / load));
+    }
+
+    private static bool Raises(Jump jump, WeeklyJumpLimits limits) =>
+        jump.Change >= limits.Raise && jump.Acute > Significant.Round(limits.UsualFactor * jump.Usual);
+
+    private Finding Find(WatchedSeries series, LocalDate date, LocalDate since, Jump read, WeeklyJumpLimits limits) => new(
+        series.Person.Id,
+        date,
+        Name,
+        Region: null,
+        Severity.Notice,
+        since,
+        read.Change,
+        limits.Raise,
+        "fraction",
+        Sentence(series, date, since, read, limits),
+        Basis(read, limits, series.Unit))
+    {
+        Quantity = series.Quantity,
+    };
+
+    private static string Sentence(WatchedSeries series, LocalDate date, LocalDate since, Jump read, WeeklyJumpLimits limits)
+    {
+        var week = read.BeforeUpTo == read.Date.PlusDays(-WeekDays) ? "the week before" : $"the last ordinary week, up to {Wording.Date(read.BeforeUpTo, date)}";
+        var numbers = $"{Wording.Number(read.Acute)} against {Wording.Number(read.Before)} {series.Unit}, usually {Wording.Number(read.Usual)}";
+        var what = $"{series.Heading} of the last 7 days {Wording.Is(read.Date, date)} {Wording.Percent(read.Change, limits.Raise)} more than {week} ({numbers})";
+        return $"{what}{Wording.NotKnownSince(read.Date, date)}{Against(read, Wording.Date(since, date), limits)}.";
+    }
+
+    private static string Against(Jump read, string since, WeeklyJumpLimits limits) => read.Change >= limits.Raise
+        ? $"; the limit is {Wording.Percent(limits.Raise)}, passed since {since}"
+        : $"; it passed the limit of {Wording.Percent(limits.Raise)} on {since} and returns below {Wording.Percent(limits.Return)}";
+
+    private static Evidence Basis(Jump read, WeeklyJumpLimits limits, string unit) => new(
+        "change = (load of the last 7 days - load of the last ordinary week) / the latter, and the last 7 days against the median of the ordinary weeks before; "
+            + "weeks scaled to their known days",
+        "a choice",
+        [
+            new("change", read.Change, "fraction", $"on {Wording.IsoDate(read.Date)}"),
+            new("acute", read.Acute, unit, "load of the last 7 days"),
+            new("before", read.Before, unit, $"the week up to {Wording.IsoDate(read.BeforeUpTo)}"),
+            new("usual", read.Usual, unit, "median of the ordinary weeks"),
+            new("raise", limits.Raise, "fraction"),
+            new("return", limits.Return, "fraction"),
+            new("usual_factor", limits.UsualFactor, "ratio"),
+            new("weeks", limits.Weeks, "count"),
+            new("look_back", limits.LookBackWeeks, "weeks"),
+            new("covered_of_7_wanted", limits.CoveredOf7, "days"),
+            new("on_days", limits.OnDays, "days"),
+        ]);
+
+    /// <summary>What a date shows; loads in the series' unit.</summary>
+    private sealed record Jump(LocalDate Date, double Acute, LocalDate BeforeUpTo, double Before, double Usual, double Change);
+}
