@@ -37,6 +37,9 @@ public sealed class StoreSession
         Decisions = new DecisionTable(this);
         Notices = new NoticeTable(this);
         TableRows = new RowTable(this);
+        TableVersions = new TableVersionTable(this);
+        Questions = new QuestionTable(this);
+        Recomputations = new RecomputationTable(this);
         People = new PersonStateTable(this);
         Configurations = new ConfigurationTable(this);
         Derived = new DerivedRows(this);
@@ -64,6 +67,12 @@ public sealed class StoreSession
     public NoticeTable Notices { get; }
 
     public RowTable TableRows { get; }
+
+    public TableVersionTable TableVersions { get; }
+
+    public QuestionTable Questions { get; }
+
+    public RecomputationTable Recomputations { get; }
 
     public PersonStateTable People { get; }
 

@@ -1,22 +1,47 @@
 using LoadWatch.People;
-using LoadWatch.Recordings;
 using LoadWatch.Rows;
-using NodaTime;
 
 namespace LoadWatch.Activities;
 
-/// <summary>One activity of recordings before rows join it.</summary>
-/// <param name="LocalStart">Local date and time of its start.</param>
-public sealed record RecordedActivity(RecordingSummary Winner, LocalDateTime LocalStart, ActivityValues Values);
+/// <summary>
+/// Joins what tables tell of a person's sessions to the recordings of them: session rows (ratings, tracking, declared content) and set logs. A row never
+/// adds a second session of what a recording holds (I-9): it joins the one recording that it fits; where several fit, or a mere rating has none, it is shown
+/// as a question and its load does not count. Rows that fit none and tell enough stand for a session of their own, until the recording comes. Pure, and the
+/// order of recordings and rows does not matter (I-5).
+/// </summary>
+public static class ActivityJoin
+{
+    /// <param name="recorded">Of the person; each becomes exactly one activity.</param>
+    /// <param name="rows">Of the person, in force; kinds other than sessions and sets are passed over.</param>
+    public static JoinResult Join(
+        Person person, IReadOnlyList<RecordedActivity> recorded, IReadOnlyList<OwnedRow> rows, AnchorBook anchors, ComputationSettings settings)
+    {
+        var recordings = recorded.ToLookup(one => one.LocalStart.Date);
+        var stated = StatedSessions.Of(rows).Concat(SetLists.Of(rows, person, anchors, settings)).ToLookup(one => one.Date);
+        var dates = recordings.Select(date => date.Key).Union(stated.Select(date => date.Key)).Order();
+        var joined = dates.Select(date => new DateJoin(recordings[date], stated[date])).ToList();
+        var sessions = joined.SelectMany(date => date.Sessions).Select(session => JoinedSession.Of(session, person, settings)).ToList();
+        return new JoinResult(
+            InOrder(sessions.Select(session => session.Activity)),
+            InOrder([.. joined.SelectMany(date => date.Questions), .. sessions.Select(session => session.Question).OfType<JoinQuestion>()]),
+            UnknownExercises(rows, settings));
+    }
 
-/// <summary>A table row in force, of a person.</summary>
-/// <param name="Layout">Name of the layout that read it: its source (I-6).</param>
-public sealed record OwnedRow(string Layout, LocalDate Date, string Key, RowContent Content);
+    private static IReadOnlyList<JoinedActivity> InOrder(IEnumerable<JoinedActivity> activities) => [.. activities
+        .OrderBy(one => one.Date)
+        .ThenBy(one => one.Start is null)
+        .ThenBy(one => one.Start)
+        .ThenBy(one => one.Key, StringComparer.Ordinal)];
 
-/// <summary>Rows that could not be joined, as a question to staff.</summary>
-/// <param name="Sentence">Without a name: what is not clear and what would settle it.</param>
-public sealed record JoinQuestion(LocalDate Date, string Sentence);
+    private static IReadOnlyList<JoinQuestion> InOrder(IEnumerable<JoinQuestion> questions) =>
+        [.. questions.Distinct().OrderBy(one => one.Date).ThenBy(one => one.Sentence, StringComparer.Ordinal)];
 
-/// <param name="Activities">By date, then start, then key.</param>
-/// <param name="Questions">By date, then sentence.</param>
-public sealed record JoinResult(IReadOnlyList<JoinedActivity> Activities, IReadOnlyList<JoinQuestion> Questions);
+    private static IReadOnlyList<string> UnknownExercises(IEnumerable<OwnedRow> rows, ComputationSettings settings) => [.. rows
+        .Select(row => row.Content)
+        .OfType<SetRow>()
+        .Select(SetRows.Exercise)
+        .OfType<string>()
+        .Where(word => !settings.Exercises.ContainsKey(word))
+        .Distinct(StringComparer.Ordinal)
+        .Order(StringComparer.Ordinal)];
+}

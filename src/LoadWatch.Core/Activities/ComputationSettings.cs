@@ -19,6 +19,9 @@ public sealed record ComputationSettings
     /// <summary>Inner bounds of the speed zones, m/s. Common practice, no consensus (Gualtieri 2023).</summary>
     public IReadOnlyList<double> SpeedBounds { get; init; } = [2, 4, 5.5, 7];
 
+    /// <summary>Shares of the person's best speed from which distance counts apart, 0.5 to 1, rising. A choice.</summary>
+    public IReadOnlyList<double> SpeedMaxShares { get; init; } = [0.8, 0.9];
+
     /// <summary>Body regions by exercise word. An exercise that is not here is asked for, not guessed.</summary>
     public IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> Exercises { get; init; } = DefaultRegions.Exercises;
 

@@ -32,6 +32,9 @@ public sealed record Alert(
     Severity Severity,
     string Text)
 {
+    /// <summary>Last date, inclusive, up to which it is not told; null: it is. Shelving stands beside the state and changes none.</summary>
+    public LocalDate? ShelvedUntil { get; init; }
+
     /// <summary><c>person|rule|about|raised</c>: the region or the quantity, empty where there is neither.</summary>
     public string Id => $"{Key.Person}|{Key.Rule}|{Key.Quantity ?? RegionWord(Key.Region)}|{Raised:uuuu-MM-dd}";
 
@@ -50,6 +53,12 @@ public enum AlertChangeReason
     /// <summary>Later data undid it: as known now it did not even hold on the date it was raised (I-14).</summary>
     Corrected,
     RaisedAgain,
+
+    /// <summary>Somebody wants not to be told up to a date.</summary>
+    Shelved,
+
+    /// <summary>It is told again: the date has passed, it asks for more than before, or the shelving was withdrawn.</summary>
+    Unshelved,
 }
 
 /// <summary>One appended row of an alert's history, with the evidence of its moment.</summary>

@@ -6,6 +6,7 @@
 //   Acknowledged                 yes     yes
 //   Returned                     no      no
 // Departures, a choice: there is no confirming besides acknowledging; a rise in severity asks to be acknowledged again, since less was seen.
+// Shelving stands beside the two axes (AlertReview): it changes no state, only whether the alert is told.
 namespace LoadWatch.Alerts;
 
 /// <summary>Where an alert goes, and why. Pure.</summary>

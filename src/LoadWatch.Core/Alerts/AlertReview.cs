@@ -8,8 +8,12 @@ namespace LoadWatch.Alerts;
 /// </summary>
 public static class AlertReview
 {
+    /// <summary>Nobody shelves an alert for longer, days. A choice.</summary>
+    public const int LongestShelvingDays = 60;
+
     /// <summary>
-    /// A finding without an alert raises one; an active alert without its finding returns. An alert that was judged on a later date is left alone.
+    /// A finding without an alert raises one; an active alert without its finding returns. An alert that was judged on a later date is left alone. Shelving
+    /// ends with the first evaluation on a day after its date, at once where severity rises (less was known when it was shelved), and with the alert. A choice.
     /// </summary>
     /// <param name="current">The person's alerts that are not normal, one for each key; normal ones are passed over.</param>
     /// <param name="lastSequence">The last sequence written for an alert id, 0 for none.</param>
@@ -37,6 +41,17 @@ public static class AlertReview
     public static AlertReviewResult Acknowledge(Alert alert, LocalDate date, Func<string, int> lastSequence) =>
         Gather([Step(alert, AlertSignal.Acknowledge, date, evidence: null, lastSequence)]);
 
+    /// <summary>Somebody wants not to be told of an alert up to a date; nothing changes where it does not stand or is shelved up to that date already.</summary>
+    /// <param name="until">Last date, inclusive.</param>
+    /// <param name="date">The date of the wish.</param>
+    public static AlertReviewResult Shelve(Alert alert, LocalDate until, LocalDate date, Func<string, int> lastSequence) =>
+        Gather([AlertLife.IsActive(alert.State) ? Shelving(new Reviewed(alert), until, AlertChangeReason.Shelved, date, lastSequence) : new Reviewed(alert)]);
+
+    /// <summary>The wish is taken back; nothing changes where the alert is not shelved.</summary>
+    /// <param name="date">The date on which it is taken back.</param>
+    public static AlertReviewResult Unshelve(Alert alert, LocalDate date, Func<string, int> lastSequence) =>
+        Gather([Shelving(new Reviewed(alert), null, AlertChangeReason.Unshelved, date, lastSequence)]);
+
     private static Reviewed Judge(
         Alert alert,
         LocalDate date,
@@ -46,19 +61,25 @@ public static class AlertReview
     {
         if (alert.Judged > date)
         {
-            return new Reviewed(alert, null);
+            return new Reviewed(alert);
         }
 
         if (finding is null)
         {
             // Judged before on this very date: a later file undid it. Else what a later file settled counts only back at its raising.
             var signal = alert.Judged < date && heldOn(alert.Key, alert.Raised) ? AlertSignal.Return : AlertSignal.Correct;
-            return Step(alert, signal, date, evidence: null, lastSequence);
+            return Step(alert with { ShelvedUntil = null }, signal, date, evidence: null, lastSequence);
         }
 
         var judged = alert with { Judged = date, Severity = finding.Severity, Text = finding.Text };
-        return Step(judged, Signal(alert, finding), date, finding.Evidence, lastSequence);
+        var stepped = Step(judged, Signal(alert, finding), date, finding.Evidence, lastSequence);
+        return HasPassed(alert.ShelvedUntil, date) || finding.Severity > alert.Severity
+            ? Shelving(stepped, null, AlertChangeReason.Unshelved, date, lastSequence)
+            : stepped;
     }
+
+    /// <summary>A date is evaluated on the day after it: that day is the first on which it can be told again.</summary>
+    private static bool HasPassed(LocalDate? until, LocalDate evaluationDate) => evaluationDate >= until;
 
     private static AlertSignal Signal(Alert alert, Finding finding) => AlertLife.IsActive(alert.State)
         ? finding.Severity.CompareTo(alert.Severity) switch
@@ -79,26 +100,39 @@ public static class AlertReview
     {
         if (AlertLife.Next(alert.State, signal) is not { } step)
         {
-            return new Reviewed(alert, null);
+            return new Reviewed(alert);
         }
 
-        var sequence = lastSequence(alert.Id) + 1;
-        var change = new AlertChange(alert.Id, sequence, date, alert.State, step.To, step.Reason, alert.Severity, alert.Text, evidence);
+        var change = Change(alert, lastSequence(alert.Id) + 1, date, step.To, step.Reason) with { Evidence = evidence };
         return new Reviewed(alert with { State = step.To }, change);
     }
+
+    /// <summary>Sets or ends shelving behind what a review found already.</summary>
+    private static Reviewed Shelving(Reviewed reviewed, LocalDate? until, AlertChangeReason reason, LocalDate date, Func<string, int> lastSequence)
+    {
+        var alert = reviewed.Alert;
+        if (alert.ShelvedUntil == until)
+        {
+            return reviewed;
+        }
+
+        var change = Change(alert, lastSequence(alert.Id) + 1 + reviewed.Changes.Length, date, alert.State, reason);
+        return new Reviewed(alert with { ShelvedUntil = until }, [.. reviewed.Changes, change]);
+    }
+
+    private static AlertChange Change(Alert alert, int sequence, LocalDate date, AlertState to, AlertChangeReason reason) =>
+        new(alert.Id, sequence, date, alert.State, to, reason, alert.Severity, alert.Text, Evidence: null);
 
     private static AlertReviewResult Gather(IEnumerable<Reviewed> reviewed)
     {
         var ordered = reviewed.OrderBy(one => one.Alert.Id, StringComparer.Ordinal).ToList();
-        return new AlertReviewResult(
-            ordered.Select(one => one.Alert).ToList(),
-            ordered.Select(one => one.Change).OfType<AlertChange>().ToList());
+        return new AlertReviewResult([.. ordered.Select(one => one.Alert)], [.. ordered.SelectMany(one => one.Changes)]);
     }
 
-    private readonly record struct Reviewed(Alert Alert, AlertChange? Change);
+    private readonly record struct Reviewed(Alert Alert, params AlertChange[] Changes);
 }
 
 /// <summary>What a review leaves behind, both in order of the alert's id.</summary>
 /// <param name="Alerts">Every alert that was looked at and every new one, those that just became normal included.</param>
-/// <param name="Changes">At most one for each alert.</param>
+/// <param name="Changes">At most one for each alert, and one more where its shelving ends.</param>
 public sealed record AlertReviewResult(IReadOnlyList<Alert> Alerts, IReadOnlyList<AlertChange> Changes);

@@ -8,9 +8,11 @@ namespace LoadWatch.Days;
 /// <param name="Date">The local date that it counts for.</param>
 /// <param name="Sources">The devices or layouts that recorded it (I-6).</param>
 /// <param name="Load">The group's load quantity, or null where it could not be computed.</param>
+/// <param name="AddsLoad">False where its load is already counted by another activity of the date: then its load, known or not, says nothing.</param>
 public sealed record ActivityOnDay(
     string Key,
     LocalDate Date,
     IReadOnlyList<string> Sources,
     double? Load,
-    IReadOnlyList<RegionStimulus> Stimulus);
+    IReadOnlyList<RegionStimulus> Stimulus,
+    bool AddsLoad = true);

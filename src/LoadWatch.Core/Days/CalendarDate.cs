@@ -17,13 +17,15 @@ internal sealed record CalendarDate(
     IReadOnlyList<ActivityOnDay> Activities,
     DayPlan Plan)
 {
-    /// <summary>0 for rest; null when unknown or when one of the activities has no load: a part of a day is not the day.</summary>
+    /// <summary>0 for rest; null when unknown or when one of the activities that add load has none: a part of a day is not the day.</summary>
     public double? Load => State switch
     {
         DayState.Rest => 0,
-        DayState.Recorded when Activities.All(activity => activity.Load.HasValue) => Sum,
+        DayState.Recorded when Adding.Any() && Adding.All(activity => activity.Load.HasValue) => Sum,
         _ => null,
     };
 
-    private double Sum => Significant.Round(Activities.Sum(activity => activity.Load!.Value));
+    private IEnumerable<ActivityOnDay> Adding => Activities.Where(activity => activity.AddsLoad);
+
+    private double Sum => Significant.Round(Adding.Sum(activity => activity.Load!.Value));
 }

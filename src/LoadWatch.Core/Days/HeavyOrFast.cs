@@ -15,7 +15,7 @@ internal static class HeavyOrFast
     };
 
     /// <summary>Whether some activity of the date had a figure that could see hard work of the region.</summary>
-    public static bool IsSeen(CalendarDate date, BodyRegion region) => date.Activities.Any(activity => Of(activity, region).Any(Sees));
+    public static bool IsSeen(CalendarDate date, BodyRegion region) => date.Activities.Any(activity => Of(activity, region).Any(stimulus => stimulus.SeesHardWork));
 
     private static bool? JudgeWork(CalendarDate date, BodyRegion region)
     {
@@ -38,9 +38,7 @@ internal static class HeavyOrFast
 
     /// <summary>An activity without an entry for the region is no work of it.</summary>
     private static bool HasUnseenWork(CalendarDate date, BodyRegion region) =>
-        date.Activities.Any(activity => Of(activity, region).Any() && !Of(activity, region).Any(Sees));
-
-    private static bool Sees(RegionStimulus stimulus) => stimulus.HardBouts.HasValue || stimulus.HardRepetitions.HasValue;
+        date.Activities.Any(activity => Of(activity, region).Any() && !Of(activity, region).Any(stimulus => stimulus.SeesHardWork));
 
     private static IEnumerable<RegionStimulus> Of(ActivityOnDay activity, BodyRegion region) =>
         activity.Stimulus.Where(stimulus => stimulus.Region == region);

@@ -23,11 +23,23 @@ public sealed record RuleLimits
     /// <summary>The usual load is fading.</summary>
     public FallingLoadLimits FallingLoad { get; init; } = new();
 
+    /// <summary>The best of the last weeks below the best before.</summary>
+    public FallingCapacityLimits FallingCapacity { get; init; } = new();
+
     /// <summary>Too long without heavy or fast work of a body region.</summary>
     public StimulusGapLimits StimulusGap { get; init; } = new();
 
+    /// <summary>Too few heavy-or-fast days of a body region.</summary>
+    public StimulusLowLimits StimulusLow { get; init; } = new();
+
     /// <summary>Expected recordings did not come.</summary>
     public SilenceLimits Silence { get; init; } = new();
+
+    /// <summary>Recordings of too little quality.</summary>
+    public NotUsableLimits NotUsable { get; init; } = new();
+
+    /// <summary>Function tests beyond a published cut-off or down by more than their error.</summary>
+    public FunctionTestLimits FunctionTest { get; init; } = new();
 
     /// <summary>Every quantity that some rule in force watches beside the group's load, each once, in ordinal order.</summary>
     [JsonIgnore]

@@ -24,6 +24,14 @@ public sealed record SilenceLimits
     [Range(28, 400)]
     public int LookBackDays { get; init; } = 84;
 
+    /// <summary>Where the plan expects recordings: planned sessions in a row without one. Count.</summary>
+    [Range(1, 20)]
+    public int PlannedMissed { get; init; } = 2;
+
+    /// <summary>Days that a recording of a planned session may take to come in. Days.</summary>
+    [Range(0, 14)]
+    public int PlannedWaitDays { get; init; } = 2;
+
     /// <summary>Longer than this is silence whatever the person's own gaps were. Days.</summary>
     [Range(7, 400)]
     public int CeilingDays { get; init; } = 42;

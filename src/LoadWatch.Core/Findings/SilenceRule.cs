@@ -5,7 +5,8 @@ using NodaTime;
 namespace LoadWatch.Findings;
 
 /// <summary>
-/// No recording for longer than the person's own rhythm lets expect. The only rule that unknown days raise (I-6); the next recording ends it.
+/// No recording for longer than the person's own rhythm lets expect; where a plan says which sessions should bring one, several of them in a row without. The
+/// only rule that unknown days raise (I-6); the next recording ends it. Absence mutes it.
 /// </summary>
 public sealed class SilenceRule : IRule
 {
@@ -18,12 +19,25 @@ public sealed class SilenceRule : IRule
         var (person, days, limits) = subject;
         var recorded = new List<LocalDate>();
         RecordingRhythm? rhythm = null;
+        var planned = new PlannedSessions(limits.Silence);
         foreach (var day in days)
         {
+            planned.Add(day);
             if (day.State == DayState.Recorded)
             {
                 recorded.Add(day.Date);
                 rhythm = RecordingRhythm.Of(recorded, limits.Silence);
+            }
+            else if (day.Plan.Absence is not null)
+            {
+                continue;
+            }
+            else if (planned.IsWatched)
+            {
+                if (planned.Missed.Count >= limits.Silence.PlannedMissed)
+                {
+                    yield return FindPlanned(person, day, planned.Missed, limits.Silence);
+                }
             }
             else if (rhythm is not null && day.DaysSinceRecorded > rhythm.LimitDays)
             {
@@ -44,6 +58,26 @@ public sealed class SilenceRule : IRule
         "days",
         Sentence(day, rhythm),
         Basis(day, rhythm, limits));
+
+    private Finding FindPlanned(Person person, Day day, IReadOnlyList<LocalDate> missed, SilenceLimits limits) => new(
+        person.Id,
+        day.Date,
+        Name,
+        Region: null,
+        Severity.Notice,
+        missed[limits.PlannedMissed - 1].PlusDays(limits.PlannedWaitDays),
+        missed.Count,
+        limits.PlannedMissed,
+        "sessions",
+        $"No recording of the last {missed.Count} planned sessions, the first on {Wording.Date(missed[0], day.Date)}.",
+        new Evidence(
+            "planned sessions in a row for which a recording was expected and none came, each given some days to come in",
+            "a choice",
+            [
+                .. missed.Select((date, at) => new EvidenceItem($"missed_{at + 1}", 1, "count", Wording.IsoDate(date))),
+                new("planned_missed", limits.PlannedMissed, "count"),
+                new("planned_wait", limits.PlannedWaitDays, "days"),
+            ]));
 
     private static string Sentence(Day day, RecordingRhythm rhythm)
     {

@@ -67,7 +67,7 @@ public sealed class StimulusGapRule : IRule
         var until = gap.Date == date ? "" : $" up to {Wording.Date(gap.Date, date)}, not known since";
         var first = Wording.Date(gap.Date.PlusDays(-gap.Days), date);
         var last = gap.Never ? $"none since it can be seen, from {first}" : $"last on {first}";
-        return $"No heavy or fast {Work(region)} for {Wording.Days(gap.Days)}{until}{Remarks(gap)}; {last}.";
+        return $"No heavy or fast {Wording.Work(region)} for {Wording.Days(gap.Days)}{until}{Remarks(gap)}; {last}.";
     }
 
     private static string Remarks(Gap gap)
@@ -77,13 +77,6 @@ public sealed class StimulusGapRule : IRule
         var remarks = string.Join("; ", new[] { known, usual }.OfType<string>());
         return remarks.Length == 0 ? "" : $" ({remarks})";
     }
-
-    private static string Work(BodyRegion region) => region switch
-    {
-        BodyRegion.Legs => "leg work",
-        BodyRegion.Trunk => "trunk work",
-        _ => "arm work",
-    };
 
     private static Evidence Basis(Gap gap, StimulusGapLimits limits) => new(
         "days since the last heavy-or-fast day (3 hard bouts, or 6 hard repetitions in 2 sets; hard: relative drive of 0.70 or more), "

@@ -1,4 +1,5 @@
 using System.Globalization;
+using LoadWatch.Stimulus;
 using NodaTime;
 
 namespace LoadWatch.Findings;
@@ -15,6 +16,14 @@ internal static class Wording
 
     /// <summary><c>1 day</c>, <c>3.5 days</c>.</summary>
     public static string Days(double days) => days == 1 ? "1 day" : $"{Number(days)} days";
+
+    /// <summary><c>leg work</c>.</summary>
+    public static string Work(BodyRegion region) => region switch
+    {
+        BodyRegion.Legs => "leg work",
+        BodyRegion.Trunk => "trunk work",
+        _ => "arm work",
+    };
 
     /// <summary>Whole from 10 up, one decimal below.</summary>
     public static string Number(double value) => value.ToString(Math.Abs(value) >= 10 ? "0" : "0.#", CultureInfo.InvariantCulture);

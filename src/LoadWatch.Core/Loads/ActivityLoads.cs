@@ -18,7 +18,8 @@ public sealed record ActivityLoads(
     {
         var (ofHeartRate, remarks) = HeartRateLoads.Of(usable, date, person, anchors);
         var (ofSets, remark) = SetTotals.Of(usable.Recording.Sets);
-        IEnumerable<Quantity> quantities = [.. ofHeartRate, .. ExternalLoads.Of(usable), .. SpeedLoads.Of(usable, settings.SpeedBounds), .. ofSets];
+        var ofSpeed = SpeedLoads.Of(usable, anchors.On(date, person.Id, AnchorKind.SpeedMax), settings);
+        IEnumerable<Quantity> quantities = [.. ofHeartRate, .. ExternalLoads.Of(usable), .. ofSpeed, .. ofSets];
         return new ActivityLoads(
             [.. quantities.OrderBy(quantity => quantity.Name, StringComparer.Ordinal)],
             [.. Zones(usable, date, person, anchors, settings)],

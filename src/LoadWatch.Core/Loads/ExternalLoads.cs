@@ -28,6 +28,10 @@ public static class ExternalLoads
         if (usable[Channel.Power] is { } power)
         {
             yield return new Quantity(QuantityNames.Work, WorkKilojoules(power), "kJ", Estimated: false);
+            if (!usable.Recording.Sport.IsOnFoot && SecondTop.Of(power) is { } top)
+            {
+                yield return new Quantity(QuantityNames.PowerTop, top, "W", Estimated: false);
+            }
         }
     }
 

@@ -24,6 +24,12 @@ public static class QuantityNames
     /// <summary>Training impulse with a person's own weighting (Manzi), arbitrary units (AU).</summary>
     public const string IndividualTrimp = "individual_trimp";
 
+    /// <summary>Rating of effort times minutes, arbitrary units (AU).</summary>
+    public const string FosterLoad = "foster_load";
+
+    /// <summary>Rating of effort of the whole session, 0 to 10 points (points). No load: a day's sum of it would mean nothing.</summary>
+    public const string Rating = "rating";
+
     /// <summary>Timer time, else elapsed time, minutes (min).</summary>
     public const string Minutes = "minutes";
 
@@ -35,6 +41,21 @@ public static class QuantityNames
 
     /// <summary>Highest speed held for 1 s, metres per second (m/s). No load: a day's sum of it would mean nothing.</summary>
     public const string SpeedTop = "speed_top";
+
+    /// <summary>The same over the person's best, a pure number (1). No load either.</summary>
+    public const string SpeedTopShare = "speed_top_share";
+
+    /// <summary>High accelerations, count.</summary>
+    public const string Accelerations = "accelerations";
+
+    /// <summary>High decelerations, count.</summary>
+    public const string Decelerations = "decelerations";
+
+    /// <summary>Highest power held for 1 s, watts (W), not on foot. No load.</summary>
+    public const string PowerTop = "power_top";
+
+    /// <summary>Begins the name of an estimated one-repetition maximum, kilograms (kg); exercise and machine follow. No load.</summary>
+    public const string OneRepetitionMaxOf = "one_repetition_max_of_";
 
     /// <summary>Mechanical work, kilojoules (kJ).</summary>
     public const string Work = "work";
@@ -48,11 +69,22 @@ public static class QuantityNames
     /// <summary>Kilograms times repetitions over all working sets, kilograms (kg).</summary>
     public const string Kilograms = "kilograms";
 
-    /// <summary>Every quantity that a group's load may be, whatever the bounds of the speed zones.</summary>
+    /// <summary>Every quantity that a group's load may be, whatever the bounds of the speed zones and the shares of the best speed.</summary>
     public static IReadOnlyList<string> All { get; } =
-        [BanisterTrimp, EdwardsLoad, LuciaLoad, StagnoLoad, IndividualTrimp, Minutes, Distance, Climb, Work, Sets, Repetitions, Kilograms];
+    [
+        BanisterTrimp, EdwardsLoad, LuciaLoad, StagnoLoad, IndividualTrimp, FosterLoad, Minutes, Distance, Climb, Accelerations, Decelerations, Work,
+        Sets, Repetitions, Kilograms,
+    ];
 
-    /// <summary>The same and the distances above those bounds that are fast (<see cref="DistanceAbove"/>).</summary>
-    public static IReadOnlyList<string> AllWith(IReadOnlyList<double> speedBounds) =>
-        [.. All, .. DistanceAbove.Bounds(speedBounds).Select(DistanceAbove.Name)];
+    /// <summary>The same, the distances above those bounds that are fast (<see cref="DistanceAbove"/>), and those above shares of the best speed
+    /// (<see cref="SpeedMaxShares"/>).</summary>
+    public static IReadOnlyList<string> AllWith(IReadOnlyList<double> speedBounds, IReadOnlyList<double> speedMaxShares) =>
+    [
+        .. All,
+        .. DistanceAbove.Bounds(speedBounds).Select(DistanceAbove.Name),
+        .. SpeedMaxShares.Distinct(speedMaxShares).Select(SpeedMaxShares.Name),
+    ];
+
+    /// <summary>True for a load that is computed from heart rate.</summary>
+    public static bool IsOfHeartRate(string name) => name is BanisterTrimp or EdwardsLoad or LuciaLoad or StagnoLoad or IndividualTrimp;
 }

@@ -5,8 +5,6 @@ namespace LoadWatch.Loads;
 /// <summary>Names of quantities in the words of a sentence, singular.</summary>
 public static class QuantityWords
 {
-    private const string DistanceUnit = "_m_s";
-
     /// <summary><c>distance at 5.5 m/s and faster</c>; a name that is not built in stands in quotes.</summary>
     public static string Of(string name) => name switch
     {
@@ -15,26 +13,38 @@ public static class QuantityWords
         QuantityNames.LuciaLoad => "load by ventilatory thresholds",
         QuantityNames.StagnoLoad => "team-sport load",
         QuantityNames.IndividualTrimp => "training impulse of own weighting",
+        QuantityNames.FosterLoad => "load by rating of effort",
+        QuantityNames.Rating => "rating of effort",
         QuantityNames.Minutes => "training time",
         QuantityNames.Distance => "distance",
         QuantityNames.Climb => "climb",
         QuantityNames.SpeedTop => "top speed",
+        QuantityNames.SpeedTopShare => "top speed as a share of the best",
+        QuantityNames.PowerTop => "top power",
+        QuantityNames.Accelerations => "number of accelerations",
+        QuantityNames.Decelerations => "number of decelerations",
         QuantityNames.Work => "work",
         QuantityNames.Sets => "number of sets",
         QuantityNames.Repetitions => "number of repetitions",
         QuantityNames.Kilograms => "weight lifted",
-        _ => BoundOf(name) is { } bound ? $"distance at {bound} m/s and faster" : $"\"{name.Replace('_', ' ')}\"",
+        _ when BoundOf(name, DistanceAbove.Prefix, "_m_s") is { } bound => $"distance at {bound} m/s and faster",
+        _ when BoundOf(name, DistanceAbove.Prefix, "_percent_speed_max") is { } share => $"distance at {share} % of the best speed and faster",
+        _ when name.StartsWith(QuantityNames.OneRepetitionMaxOf, StringComparison.Ordinal) =>
+            $"estimated maximum of {name[QuantityNames.OneRepetitionMaxOf.Length..].Replace('_', ' ')}",
+        _ => $"\"{name.Replace('_', ' ')}\"",
     };
 
-    /// <summary>The reverse of <see cref="DistanceAbove.Name"/>.</summary>
-    private static string? BoundOf(string name)
+    /// <summary><c>5.5</c> of <c>distance_above_5_5_m_s</c>; null for any other name.</summary>
+    private static string? BoundOf(string name, string prefix, string ending)
     {
-        if (!name.StartsWith(DistanceAbove.Prefix, StringComparison.Ordinal) || !name.EndsWith(DistanceUnit, StringComparison.Ordinal))
+        if (name.Length <= prefix.Length + ending.Length
+            || !name.StartsWith(prefix, StringComparison.Ordinal)
+            || !name.EndsWith(ending, StringComparison.Ordinal))
         {
             return null;
         }
 
-        var bound = name[DistanceAbove.Prefix.Length..Math.Max(DistanceAbove.Prefix.Length, name.Length - DistanceUnit.Length)].Replace('_', '.');
+        var bound = name[prefix.Length..^ending.Length].Replace('_', '.');
         return double.TryParse(bound, NumberStyles.AllowDecimalPoint, CultureInfo.InvariantCulture, out _) ? bound : null;
     }
 }

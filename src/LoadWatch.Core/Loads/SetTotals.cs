@@ -2,7 +2,7 @@ using LoadWatch.Recordings;
 
 namespace LoadWatch.Loads;
 
-/// <summary>Working sets, repetitions and kilograms of a session. The rest between two sets is no work.</summary>
+/// <summary>Working sets, repetitions and kilograms of a session, and the maxima that they let expect. The rest between two sets is no work.</summary>
 public static class SetTotals
 {
     /// <summary>Beyond it a stated load is a slip of writing; no one lifts it.</summary>
@@ -31,6 +31,7 @@ public static class SetTotals
             quantities.Add(new(QuantityNames.Kilograms, Significant.Round(kilograms), "kg", Estimated: false));
         }
 
+        quantities.AddRange(OneRepetitionMaxEstimate.Of(counted));
         return (quantities, Remark(work.Count, counted.Count, weighed.Count));
     }
 

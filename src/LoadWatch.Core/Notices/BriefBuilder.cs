@@ -36,7 +36,8 @@ public static class BriefBuilder
         };
     }
 
-    internal static bool IsActive(AlertNews news) => news.Alert.State is AlertState.Unacknowledged or AlertState.Acknowledged;
+    /// <summary>Standing and told: one that is shelved is not.</summary>
+    internal static bool IsActive(AlertNews news) => AlertLife.IsActive(news.Alert.State) && news.Alert.ShelvedUntil is null;
 
     /// <summary>Active alerts, warnings first, then by rule and region.</summary>
     internal static IEnumerable<AlertNews> Active(BriefSubject subject) => subject.Alerts

@@ -1,3 +1,4 @@
+using LoadWatch.Alerts;
 using LoadWatch.Days;
 using LoadWatch.Stimulus;
 using NodaTime;
@@ -80,6 +81,11 @@ internal static class BriefRows
         foreach (var news in BriefBuilder.ToLookAt(subject) ? [] : BriefBuilder.Active(subject))
         {
             yield return $"seen before and still standing: {RuleTexts.Named(news.Alert.Key, self: false)}";
+        }
+
+        foreach (var news in subject.Alerts.Where(news => AlertLife.IsActive(news.Alert.State) && news.Alert.ShelvedUntil is not null).OrderBy(news => news.Alert.Id, StringComparer.Ordinal))
+        {
+            yield return $"shelved until {BriefNumbers.Day(news.Alert.ShelvedUntil)}: {RuleTexts.Named(news.Alert.Key, self: false)}";
         }
 
         if (subject.Days.All(day => day.State != DayState.Recorded))

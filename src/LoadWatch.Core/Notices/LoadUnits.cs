@@ -9,7 +9,7 @@ public static class LoadUnits
     public static string Of(string quantity) => quantity switch
     {
         QuantityNames.BanisterTrimp or QuantityNames.EdwardsLoad or QuantityNames.LuciaLoad or QuantityNames.StagnoLoad
-            or QuantityNames.IndividualTrimp => "AU",
+            or QuantityNames.IndividualTrimp or QuantityNames.FosterLoad => "AU",
         QuantityNames.Minutes => "min",
         QuantityNames.Distance or QuantityNames.Climb => "m",
         _ when quantity.StartsWith(DistanceAbove.Prefix, StringComparison.Ordinal) => "m",

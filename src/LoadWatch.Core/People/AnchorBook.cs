@@ -7,10 +7,18 @@ public sealed class AnchorBook
 {
     private readonly ILookup<(string Person, AnchorKind Kind, string? Exercise), Anchor> anchors;
 
-    public AnchorBook(IEnumerable<Anchor> anchors) =>
-        this.anchors = anchors.ToLookup(anchor => (anchor.Person, anchor.Kind, anchor.Exercise));
+    private readonly IReadOnlyList<Anchor> all;
+
+    public AnchorBook(IEnumerable<Anchor> anchors)
+    {
+        all = [.. anchors];
+        this.anchors = all.ToLookup(anchor => (anchor.Person, anchor.Kind, anchor.Exercise));
+    }
 
     public static AnchorBook Empty { get; } = new([]);
+
+    /// <summary>This book and more anchors.</summary>
+    public AnchorBook With(IEnumerable<Anchor> more) => new([.. all, .. more]);
 
     /// <summary>
     /// The anchor that holds on <paramref name="date"/>, or null: measured before observed before estimated, then the latest, an undated

@@ -1,9 +1,10 @@
+using LoadWatch.Rows;
 using NodaTime;
 
 namespace LoadWatch.Recordings;
 
 /// <summary>What becomes of an arrival: its state and the reason shown with it. Pure.</summary>
-/// <param name="Person">Id of the owner where stored, else null.</param>
+/// <param name="Person">Id of the owner where stored and there is one, else null.</param>
 public sealed record ArrivalVerdict(ArrivalState State, string? Reason, string? Person)
 {
     /// <summary>No recording can be older: devices that lost their clock write earlier dates.</summary>
@@ -17,6 +18,11 @@ public sealed record ArrivalVerdict(ArrivalState State, string? Reason, string? 
     /// <param name="now">A session cannot begin more than a day after it.</param>
     public static ArrivalVerdict Of(DecodedFile file, IReadOnlyCollection<string> claims, Instant now)
     {
+        if (file.Table is { } table)
+        {
+            return OfTable(file, table, claims);
+        }
+
         if (file.Recordings.Count == 0)
         {
             return WithoutRecordings(file);
@@ -52,6 +58,16 @@ public sealed record ArrivalVerdict(ArrivalState State, string? Reason, string? 
     /// <summary>Whether a recording carries a plausible date and so counts once its arrival is stored.</summary>
     public static bool IsUsable(Recording recording, Instant now) =>
         recording.Start is { } start && start >= Earliest && start <= now + Duration.FromDays(1);
+
+    /// <summary>A table whose rows name people needs no owner, and neither does a plan, which is about everybody where it names nobody.</summary>
+    private static ArrivalVerdict OfTable(DecodedFile file, DecodedTable table, IReadOnlyCollection<string> claims)
+    {
+        var owner = claims.Count == 1 ? claims.Single() : null;
+        var needsOwner = table.Kind is not (RowKind.Plan or RowKind.Answers) && table.Rows.Any(row => row.Subject is null);
+        return needsOwner && owner is null
+            ? new ArrivalVerdict(ArrivalState.Held, "owner unknown: a table that names no people, and no one folder above it is named after a person of the roster", null)
+            : new ArrivalVerdict(ArrivalState.Stored, file.Problems.Count > 0 ? file.Problems[0].ToString() : null, owner);
+    }
 
     private static ArrivalVerdict WithoutRecordings(DecodedFile file)
     {

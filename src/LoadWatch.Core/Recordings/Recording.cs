@@ -8,6 +8,9 @@ public sealed record Recording
     /// <summary>Counts the recordings of one file from 1, in file order.</summary>
     public required int Part { get; init; }
 
+    /// <summary>The person or device as the file writes it, where it holds several people; null: the owner of the file.</summary>
+    public string? Subject { get; init; }
+
     public required Sport Sport { get; init; }
 
     /// <summary>Start of the session; null where the file carries no date (device uptime, no clock).</summary>

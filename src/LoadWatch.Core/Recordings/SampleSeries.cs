@@ -58,6 +58,31 @@ public sealed class SampleSeries
     /// <summary>Latest dated row, or null.</summary>
     public Instant? Last => Extreme((a, b) => a > b);
 
+    /// <summary>The rows named by their number from 0, in the order given; channels without a reading in them are left out.</summary>
+    public SampleSeries Take(IReadOnlyList<int> rows)
+    {
+        ArgumentNullException.ThrowIfNull(rows);
+        var taken = Channels.ToDictionary(channel => channel, channel => Of(columns[(int)channel]!, rows));
+        return new SampleSeries(
+            Of(times, rows),
+            taken.Where(column => Array.Exists(column.Value, value => !double.IsNaN(value))).ToDictionary(column => column.Key, column => column.Value));
+    }
+
+    /// <summary>The same rows without some of the channels.</summary>
+    public SampleSeries Without(params IReadOnlyCollection<Channel> channels) =>
+        new(times, Channels.Except(channels).ToDictionary(channel => channel, channel => columns[(int)channel]!));
+
+    private static T[] Of<T>(T[] column, IReadOnlyList<int> rows)
+    {
+        var taken = new T[rows.Count];
+        for (var row = 0; row < taken.Length; row++)
+        {
+            taken[row] = column[rows[row]];
+        }
+
+        return taken;
+    }
+
     private Instant? Extreme(Func<long, long, bool> better)
     {
         long? found = null;

@@ -55,4 +55,8 @@ public sealed record RegionStimulus(
     Band? SlowSeconds,
     Band? MediumSeconds,
     Band? LargeSeconds,
-    IReadOnlyList<string> NotSeen);
+    IReadOnlyList<string> NotSeen)
+{
+    /// <summary>Whether the figures could tell hard work, or that there was none.</summary>
+    public bool SeesHardWork => HardBouts.HasValue || HardRepetitions.HasValue;
+}

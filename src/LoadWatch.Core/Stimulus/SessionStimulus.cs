@@ -35,16 +35,16 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
         IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> sports)
     {
         var sport = usable.Recording.Sport;
-        if (!sports.TryGetValue(sport.ToString(), out var regions) && !sports.TryGetValue(sport.Name, out regions))
+        if (SportRegions.Of(sport, sports) is not { } regions)
         {
-            var question = $"sport {sport}: which body regions?";
+            var question = SportRegions.Question(sport);
             return new SessionStimulus([.. BodyRegions.All.Select(region => EnduranceEstimate.Nothing.For(region, [question]))], [question]);
         }
 
         var capacity = sport.IsOnFoot ? null : PowerCapacity.On(date, person.Id, anchors);
         var notSeen = NotRead(usable, capacity).ToList();
         var estimate = Best(usable, capacity, date, person, anchors);
-        return new SessionStimulus([.. regions.Distinct().Order().Select(region => estimate.For(region, notSeen))], []);
+        return new SessionStimulus([.. regions.Select(region => estimate.For(region, notSeen))], []);
     }
 
     private static EnduranceEstimate Best(

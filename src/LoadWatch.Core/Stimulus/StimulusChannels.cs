@@ -7,6 +7,9 @@ public static class StimulusChannels
     public const string Sets = "sets";
     public const string HeartRate = "heart_rate";
 
+    /// <summary>Nothing but a statement of staff.</summary>
+    public const string Declared = "declared";
+
     /// <summary>Nothing could tell: every figure is unknown.</summary>
     public const string None = "none";
 }

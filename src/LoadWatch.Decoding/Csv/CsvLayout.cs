@@ -12,7 +12,8 @@ public enum CsvKind
 
 /// <summary>
 /// Describes one kind of CSV file, so that nothing about it is guessed. A file has a layout when its first line holds every name of
-/// <see cref="Header"/>, the time column and at least one channel column. Names are compared exactly, without the blanks around them.
+/// <see cref="Header"/>, the time column, the columns of start, date, person and quality that the layout names, and at least one channel
+/// column. Names are compared exactly, without the blanks around them.
 /// </summary>
 public sealed record CsvLayout
 {
@@ -59,6 +60,15 @@ public sealed record CsvLayout
     /// </summary>
     public string? SportColumn { get; init; }
 
+    /// <summary>
+    /// The column that tells the people or devices of one file apart, as the file writes them: each gets recordings of its own, and a row
+    /// without one cannot be used. Rows of one person more than 60 min apart are two recordings. Default null: one file is one recording.
+    /// </summary>
+    public string? PersonColumn { get; init; }
+
+    /// <summary>Which rows were received too badly to give a position. Default null: every reading counts.</summary>
+    public CsvQuality? Quality { get; init; }
+
     /// <summary>Why this layout cannot be used, one sentence each; empty when it can.</summary>
     public IReadOnlyList<string> Validate() => CsvLayoutCheck.Reasons(this);
 }
@@ -92,6 +102,15 @@ public sealed record CsvTimeColumn
 
     /// <summary>How the start is written: any format but <c>seconds_from_start</c>. Default <c>iso8601</c>.</summary>
     public string StartFormat { get; init; } = Iso8601;
+
+    /// <summary>
+    /// For times of day: the column that holds the local date; <see cref="Format"/> is then a pattern of a time of day, or <c>iso8601</c>
+    /// (<c>HH:mm:ss</c> with or without a fraction). Under an empty cell the date goes on, past midnight to the next day. Default null.
+    /// </summary>
+    public string? DateColumn { get; init; }
+
+    /// <summary>How the date is written: <c>iso8601</c> or a NodaTime pattern of a date (<c>dd.MM.yyyy</c>). Default <c>iso8601</c>.</summary>
+    public string DateFormat { get; init; } = Iso8601;
 }
 
 /// <summary>A column that holds the readings of a channel.</summary>

@@ -9,6 +9,7 @@ internal static class CsvLayoutCheck
     public static IReadOnlyList<string> Reasons(CsvLayout layout) =>
     [
         .. Basics(layout), .. Header(layout), .. Time(layout.Time), .. Channels(layout.Columns), .. SharedColumns(layout), .. Sport(layout),
+        .. QualityCell.Complaints(layout.Quality),
     ];
 
     private static IEnumerable<string> Basics(CsvLayout layout)
@@ -67,6 +68,14 @@ internal static class CsvLayoutCheck
             yield return $"time.zone '{zone}' is not an IANA zone";
         }
 
+        foreach (var reason in time.DateColumn is null ? Moments(time) : DayClock.Complaints(time))
+        {
+            yield return reason;
+        }
+    }
+
+    private static IEnumerable<string> Moments(CsvTimeColumn time)
+    {
         if (time.Format == CsvTimeColumn.SecondsFromStart)
         {
             if (string.IsNullOrWhiteSpace(time.StartColumn))
@@ -133,6 +142,7 @@ internal static class CsvLayoutCheck
 
     private static IEnumerable<string> Named(CsvLayout layout) => layout.Columns.Select(column => column.Column)
         .Append(layout.Time.Column).Append(layout.Time.StartColumn).Append(layout.SportColumn)
+        .Append(layout.Time.DateColumn).Append(layout.PersonColumn).Append(layout.Quality?.Column)
         .Where(name => !string.IsNullOrWhiteSpace(name)).Select(name => name!);
 
     private static IEnumerable<T> Repeated<T>(IEnumerable<T> items) =>

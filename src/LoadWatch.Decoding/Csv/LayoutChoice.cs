@@ -36,8 +36,12 @@ internal sealed record LayoutChoice(CsvLayout? Layout, CsvTable? Table, Problem?
     private static bool Fits(CsvLayout layout, CsvTable table) =>
         layout.Header.All(table.Has)
         && table.Has(layout.Time.Column)
-        && (layout.Time.StartColumn is not { } start || table.Has(start))
+        && Wanted(layout).All(name => name is null || table.Has(name))
         && layout.Columns.Any(column => table.Has(column.Column));
+
+    /// <summary>Without these columns the rows would mean something else.</summary>
+    private static IEnumerable<string?> Wanted(CsvLayout layout) =>
+        [layout.Time.StartColumn, layout.Time.DateColumn, layout.PersonColumn, layout.Quality?.Column];
 
     private static LayoutChoice Checked(CsvLayout layout, CsvTable table)
     {
@@ -48,7 +52,7 @@ internal sealed record LayoutChoice(CsvLayout? Layout, CsvTable? Table, Problem?
     }
 
     private static IEnumerable<string?> UsedColumns(CsvLayout layout) =>
-        [.. layout.Columns.Select(column => column.Column), layout.Time.Column, layout.Time.StartColumn, layout.SportColumn];
+        [.. layout.Columns.Select(column => column.Column), layout.Time.Column, layout.SportColumn, .. Wanted(layout)];
 
     private static Problem NoneFits(IEnumerable<CsvTable> tables, IReadOnlyList<CsvLayout> layouts)
     {

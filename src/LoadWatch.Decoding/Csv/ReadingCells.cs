@@ -16,10 +16,12 @@ internal sealed class ReadingCells(CsvTable table, CsvLayout layout)
            select (table.Find(column.Column)!.Value, column.Channel, ChannelUnit.Find(column.Channel, column.Unit)!.Value),
     ];
 
+    private readonly QualityCell? quality = layout.Quality is { } wanted ? new(table, wanted, layout.Decimal) : null;
+
     /// <summary>The readings of the row last taken, by channel number; NaN for none.</summary>
     public ReadOnlySpan<double> Values => values;
 
-    /// <returns>The first cell that is no reading, or null.</returns>
+    /// <returns>The first cell that is no reading, or the cell of the quality that is no number; else null.</returns>
     public Problem? Take(CsvRows rows)
     {
         Array.Fill(values, double.NaN);
@@ -44,6 +46,6 @@ internal sealed class ReadingCells(CsvTable table, CsvLayout layout)
             values[(int)channel] = unit.Convert(value);
         }
 
-        return null;
+        return quality?.Take(rows, values);
     }
 }

@@ -3,7 +3,7 @@ using NodaTime;
 
 namespace LoadWatch.Decoding.Csv;
 
-/// <summary>Tells the time of each row, whichever way the layout says it is written.</summary>
+/// <summary>Tells the time of each row, whichever way the layout says it is written; the rows of each person are followed on their own.</summary>
 internal sealed class RowClock
 {
     private readonly CsvTable table;
@@ -13,9 +13,9 @@ internal sealed class RowClock
     private readonly char decimalMark;
     private readonly int timeColumn;
     private readonly int? startColumn;
+    private readonly DayClock? days;
     private readonly LineCount backwards = new();
-    private Instant? sessionStart;
-    private Instant? previous;
+    private Instant? startOfFile;
 
     public RowClock(CsvTable table, CsvLayout layout)
     {
@@ -26,26 +26,30 @@ internal sealed class RowClock
         decimalMark = layout.Decimal;
         timeColumn = table.Find(time.Column)!.Value;
         startColumn = table.Find(time.StartColumn);
-        notation = TimeNotation.Of(startColumn is null ? time.Format : time.StartFormat, layout.Decimal);
+        days = time.DateColumn is null ? null : new DayClock(table, time);
+        notation = TimeNotation.Of(startColumn is not null ? time.StartFormat : days is null ? time.Format : CsvTimeColumn.Iso8601, layout.Decimal);
     }
 
-    /// <summary>Local time minus UTC as the first dated row or the layout's zone states it, or null.</summary>
-    public Offset? LocalOffset { get; private set; }
+    /// <summary>Local time minus UTC as a row or the layout's zone states it, or null.</summary>
+    public Offset? LocalOffset(ClockTrack track, Instant start) => track.Offset ?? (stated ? zone.Zone.GetUtcOffset(start) : null);
 
     /// <returns>Null with the problem, for a row that cannot be dated.</returns>
-    public Instant? Read(CsvRows rows, out Problem? problem) =>
-        startColumn is { } column ? FromStart(rows, column, out problem) : Moment(rows, timeColumn, previous, out problem);
-
-    /// <summary>Takes the time of a row that counts as the one that the next is compared with.</summary>
-    public void Accept(Instant time, long line)
+    public Instant? Read(CsvRows rows, ClockTrack track, out Problem? problem) => (days, startColumn) switch
     {
-        if (time < previous)
+        ({ } known, _) => OfDay(rows, known, track, out problem),
+        (_, { } column) => FromStart(rows, column, track, out problem),
+        _ => Moment(rows, timeColumn, track, track.Previous, out problem),
+    };
+
+    /// <summary>Takes the time of a row that counts as the one that the next of the same person is compared with.</summary>
+    public void Accept(Instant time, ClockTrack track, long line)
+    {
+        if (time < track.Previous)
         {
             backwards.Add(line);
         }
 
-        LocalOffset ??= stated && previous is null ? zone.Zone.GetUtcOffset(time) : null;
-        previous = time;
+        track.Previous = time;
     }
 
     /// <summary>What is to be known about the times although all rows count.</summary>
@@ -60,9 +64,15 @@ internal sealed class RowClock
         return all.Where(entry => entry.Lines.Count > 0).Select(entry => Warning(entry.Lines, entry.Reason));
     }
 
-    private Instant? FromStart(CsvRows rows, int column, out Problem? problem)
+    private Instant? OfDay(CsvRows rows, DayClock known, ClockTrack track, out Problem? problem)
     {
-        if (!TakeStart(rows, column, out problem))
+        var above = track.Previous?.InZone(zone.Zone).LocalDateTime;
+        return known.Read(rows, above, out problem) is { } local ? zone.Place(local, track.Previous, rows.Line) : null;
+    }
+
+    private Instant? FromStart(CsvRows rows, int column, ClockTrack track, out Problem? problem)
+    {
+        if (!TakeStart(rows, column, track, out problem))
         {
             return null;
         }
@@ -73,19 +83,22 @@ internal sealed class RowClock
             return null;
         }
 
-        return sessionStart!.Value + Duration.FromMilliseconds((long)Math.Round(seconds * 1000));
+        return track.SessionStart!.Value + Duration.FromMilliseconds((long)Math.Round(seconds * 1000));
     }
 
-    private bool TakeStart(CsvRows rows, int column, out Problem? problem)
+    /// <summary>The person's first filled cell counts; without one yet, the first of the file.</summary>
+    private bool TakeStart(CsvRows rows, int column, ClockTrack track, out Problem? problem)
     {
         problem = null;
         if (rows[column].IsEmpty)
         {
-            problem = sessionStart is null ? table.Wrong(rows, column, "no start of the session yet") : null;
+            track.SessionStart ??= startOfFile;
+            problem = track.SessionStart is null ? table.Wrong(rows, column, "no start of the session yet") : null;
         }
-        else if (Moment(rows, column, before: null, out problem) is { } start)
+        else if (Moment(rows, column, track, before: null, out problem) is { } start)
         {
-            problem = start == (sessionStart ??= start)
+            startOfFile ??= start;
+            problem = start == (track.SessionStart ??= start)
                 ? null
                 : table.Wrong(rows, column, "another start than in the rows above: one file holds one session");
         }
@@ -93,7 +106,7 @@ internal sealed class RowClock
         return problem is null;
     }
 
-    private Instant? Moment(CsvRows rows, int column, Instant? before, out Problem? problem)
+    private Instant? Moment(CsvRows rows, int column, ClockTrack track, Instant? before, out Problem? problem)
     {
         problem = null;
         if (!notation.TryRead(rows[column], out var written))
@@ -102,7 +115,7 @@ internal sealed class RowClock
             return null;
         }
 
-        LocalOffset ??= written.Offset;
+        track.Offset ??= written.Offset;
         return written.Instant ?? zone.Place(written.Local, before, rows.Line);
     }
 
@@ -113,4 +126,17 @@ internal sealed class RowClock
             Line: lines.First,
             Column: timeColumn + 1,
             Field: table.Names[timeColumn]);
+}
+
+/// <summary>What the rows of one person have told of time so far.</summary>
+internal sealed class ClockTrack
+{
+    /// <summary>The start from which seconds count.</summary>
+    public Instant? SessionStart { get; set; }
+
+    /// <summary>The last row that counts.</summary>
+    public Instant? Previous { get; set; }
+
+    /// <summary>Local time minus UTC as a cell wrote it.</summary>
+    public Offset? Offset { get; set; }
 }

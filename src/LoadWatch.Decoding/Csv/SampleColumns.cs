@@ -2,19 +2,13 @@ using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Csv;
 
-/// <summary>
-/// Fills the columns of a series. They are made once, for as many rows as the file has lines, so memory is what the readings need; a
-/// channel without
-/// a reading takes none.
-/// </summary>
-internal sealed class SampleColumns(int rowsAtMost)
+/// <summary>Fills the columns of a series; memory is what the readings need, and a channel without a reading takes none.</summary>
+internal sealed class SampleColumns
 {
-    private readonly long[] times = new long[rowsAtMost];
-    private readonly double[]?[] values = new double[]?[Enum.GetValues<Channel>().Length];
+    private readonly GrowingColumn<long> times = new(SampleSeries.Undated);
+    private readonly GrowingColumn<double>?[] values = new GrowingColumn<double>?[Enum.GetValues<Channel>().Length];
 
     public int Count { get; private set; }
-
-    public bool IsFull => Count == times.Length;
 
     /// <param name="unixMilliseconds">Time of the row.</param>
     /// <param name="readings">By channel number; NaN for none.</param>
@@ -25,7 +19,7 @@ internal sealed class SampleColumns(int rowsAtMost)
         {
             if (!double.IsNaN(readings[channel]))
             {
-                (values[channel] ??= Empty())[Count] = readings[channel];
+                (values[channel] ??= new(double.NaN))[Count] = readings[channel];
             }
         }
 
@@ -40,20 +34,11 @@ internal sealed class SampleColumns(int rowsAtMost)
         {
             if (values[(int)channel] is { } column)
             {
-                columns[channel] = Cut(column);
+                columns[channel] = column.Close(Count);
                 values[(int)channel] = null;
             }
         }
 
-        return new SampleSeries(Cut(times), columns);
+        return new SampleSeries(times.Close(Count), columns);
     }
-
-    private double[] Empty()
-    {
-        var column = new double[times.Length];
-        Array.Fill(column, double.NaN);
-        return column;
-    }
-
-    private T[] Cut<T>(T[] column) => column.Length == Count ? column : column[..Count];
 }

@@ -5,23 +5,27 @@ namespace LoadWatch.Decoding.Csv;
 /// <summary>Reads the rows of one file by one layout.</summary>
 internal sealed class SampleReading
 {
-    // A day at 20 Hz and more; with every channel filled the columns stay near 110 MB.
+    // A day at 20 Hz and more, or 25 people for two hours at 10 Hz; with every channel filled the columns stay near 110 MB.
     private const int RowsAtMost = 2_000_000;
+
+    // A squad for a season; without a limit a file of rows an hour apart would give a recording a row.
+    private const int RecordingsAtMost = 2_000;
 
     private readonly CsvTable table;
     private readonly CsvLayout layout;
     private readonly RowClock clock;
-    private readonly SampleColumns samples;
+    private readonly SampleSubjects subjects;
     private readonly RowProblems problems = new();
     private readonly ReadingCells readings;
     private readonly SportCell sport;
+    private int goodRows;
 
     public SampleReading(CsvTable table, CsvLayout layout)
     {
         this.table = table;
         this.layout = layout;
         clock = new RowClock(table, layout);
-        samples = new SampleColumns(Math.Clamp(table.Text.LinesAtMost() - table.RowsAbove, 0, RowsAtMost));
+        subjects = new SampleSubjects(table, layout);
         readings = new ReadingCells(table, layout);
         sport = new SportCell(table, layout);
     }
@@ -30,10 +34,13 @@ internal sealed class SampleReading
     {
         if ((ReadRows() ?? TooManyBad()) is { } refusal)
         {
-            return new("csv", FileType: null, layout.Name, [], [refusal, .. problems.Close()]);
+            return Refused(refusal);
         }
 
-        return new("csv", FileType: null, layout.Name, [ToRecording()], [.. problems.Close(), .. clock.Warnings()]);
+        var recordings = ToRecordings();
+        return recordings.Count <= RecordingsAtMost
+            ? new("csv", FileType: null, layout.Name, recordings, [.. problems.Close(), .. clock.Warnings()])
+            : Refused(new Problem(ProblemSeverity.Error, $"more than {RecordingsAtMost} recordings: too many rows lie more than 60 min apart"));
     }
 
     /// <summary>Null once all rows are read, else why the file cannot be used.</summary>
@@ -47,7 +54,7 @@ internal sealed class SampleReading
                 continue;
             }
 
-            if (samples.IsFull)
+            if (goodRows == RowsAtMost)
             {
                 return Refusal($"more than {RowsAtMost} rows", rows.Line);
             }
@@ -98,7 +105,9 @@ internal sealed class SampleReading
             return shape;
         }
 
-        if (clock.Read(rows, out var problem) is not { } time || (problem = readings.Take(rows)) is not null)
+        if (subjects.Of(rows, out var problem) is not { } subject
+            || clock.Read(rows, subject.Clock, out problem) is not { } time
+            || (problem = readings.Take(rows)) is not null)
         {
             return problem;
         }
@@ -108,8 +117,9 @@ internal sealed class SampleReading
             problems.Add(doubt);
         }
 
-        clock.Accept(time, rows.Line);
-        samples.Add(time.ToUnixTimeMilliseconds(), readings.Values);
+        clock.Accept(time, subject.Clock, rows.Line);
+        subject.Samples.Add(time.ToUnixTimeMilliseconds(), readings.Values);
+        goodRows++;
         return null;
     }
 
@@ -149,8 +159,8 @@ internal sealed class SampleReading
 
     private Problem? TooManyBad()
     {
-        var all = samples.Count + problems.BadLines;
-        return samples.Count switch
+        var all = goodRows + problems.BadLines;
+        return goodRows switch
         {
             0 when all == 0 => Refusal("no rows below the column names", table.Line ?? 1),
             0 => new Problem(ProblemSeverity.Error, $"none of {all} rows can be used"),
@@ -160,19 +170,37 @@ internal sealed class SampleReading
         };
     }
 
-    private Recording ToRecording()
+    private List<Recording> ToRecordings()
     {
-        var series = samples.ToSeries();
+        List<Recording> recordings = [];
+        foreach (var subject in subjects.InOrder.Where(one => one.Samples.Count > 0))
+        {
+            var all = subject.Samples.ToSeries();
+            foreach (var series in subject.Name is null ? [all] : SessionGaps.Split(all))
+            {
+                recordings.Add(ToRecording(recordings.Count + 1, subject, series));
+            }
+        }
+
+        return recordings;
+    }
+
+    private Recording ToRecording(int part, SampleSubject subject, SampleSeries series)
+    {
+        var start = series.First!.Value;
         return new Recording
         {
-            Part = 1,
+            Part = part,
+            Subject = subject.Name,
             Sport = sport.Found,
-            Start = series.First,
-            LocalOffset = clock.LocalOffset,
-            ElapsedSeconds = (series.Last - series.First)?.TotalSeconds,
+            Start = start,
+            LocalOffset = clock.LocalOffset(subject.Clock, start),
+            ElapsedSeconds = (series.Last!.Value - start).TotalSeconds,
             Samples = series,
         };
     }
+
+    private DecodedFile Refused(Problem refusal) => new("csv", FileType: null, layout.Name, [], [refusal, .. problems.Close()]);
 
     private Problem WrongCount(CsvRows rows) => Refusal($"{rows.CellCount} cells for {table.Names.Count} columns", rows.Line);
 

@@ -1,3 +1,4 @@
+using LoadWatch.Activities;
 using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Configuration;
@@ -10,11 +11,14 @@ namespace LoadWatch.Service.Arrivals;
 
 /// <summary>
 /// Takes up decisions on owners that are not in effect yet: the content is judged again, and the days of whoever had it and of whoever gets it are computed
-/// anew. One that is held for another reason, its date, is looked at again by every sweep.
+/// anew. One that is held for another reason, its date, is looked at again by every sweep. So are decisions that were withdrawn and still show.
 /// </summary>
 public sealed class AssignedFiles(
     WorkingConfiguration configuration, Store store, Archive archive, ArchiveReader reader, Settlement settlement, SweepReport report)
 {
+    /// <summary>Why a content is held whose owner by decision has left.</summary>
+    public static string NotInTheRoster(string person) => $"assigned to {person}, who is not in the roster";
+
     public void TakeUp(CancellationToken cancel)
     {
         foreach (var kept in store.Read(Waiting).GroupBy(arrival => arrival.ObjectSha, StringComparer.Ordinal))
@@ -36,7 +40,33 @@ public sealed class AssignedFiles(
         .Select(decision => (Arrival: session.Arrivals.Get(decision.Subject), Owner: configuration.People.GetValueOrDefault(decision.Person)))
         .Where(item => item is { Owner: { } owner, Arrival: { State: ArrivalState.Stored or ArrivalState.Held } arrival } && arrival.Person != owner.Id)
         .Select(item => item.Arrival!)
+        .Concat(Withdrawn(session))
         .ToList();
+
+    private IEnumerable<Arrival> Withdrawn(StoreSession session) => session.Decisions.AssignedNoMore()
+        .OrderBy(pair => pair.Key, StringComparer.Ordinal)
+        .Select(pair => (Arrival: session.Arrivals.Get(pair.Key), pair.Value.Person))
+        .Where(item => item.Arrival is { } arrival && StillShows(session, arrival, item.Person))
+        .Select(item => item.Arrival!);
+
+    private bool StillShows(StoreSession session, Arrival arrival, string person) => arrival.State switch
+    {
+        ArrivalState.Held => arrival.Reason == NotInTheRoster(person),
+        ArrivalState.Stored => arrival.Person == person && !IsOwnerAnyway(session, arrival),
+        _ => false,
+    };
+
+    private bool IsOwnerAnyway(StoreSession session, Arrival arrival)
+    {
+        var claims = Attribution.Claims(null, [.. session.Sightings.Of(arrival.Sha).Select(sighting => new SeenName(sighting.Inbox, sighting.Path))], configuration);
+        return claims.Count > 0
+            ? claims is [var only] && only == arrival.Person
+            : session.Recordings.OfArrival(arrival.Sha).All(recording => OwnsDevice(recording, arrival.Person!));
+    }
+
+    /// <summary>A recording's source ends with its device's serial number, where there is one.</summary>
+    private bool OwnsDevice(RecordingSummary recording, string person) =>
+        configuration.Devices.On(recording.Source[(recording.Source.LastIndexOfAny([' ', '/']) + 1)..], recording.Date, session: null) == person;
 
     private void Settle(string objectSha, HashSet<string> shas)
     {

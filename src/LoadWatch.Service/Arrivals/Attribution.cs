@@ -1,27 +1,67 @@
 using LoadWatch.People;
+using LoadWatch.Recordings;
+using LoadWatch.Service.Configuration;
+using NodaTime;
 
 namespace LoadWatch.Service.Arrivals;
 
-/// <summary>Who is named as the owner: by a decision, else by where a file was seen.</summary>
+/// <summary>A name under which a content was seen.</summary>
+/// <param name="Inbox">Name of the inbox.</param>
+/// <param name="Path">Below it, <c>/</c> between folders.</param>
+public readonly record struct SeenName(string Inbox, string Path);
+
+/// <summary>
+/// Who is named as the owner, the first that names anybody: a decision, the folders, the file name by its inbox's pattern; and once the content is decoded,
+/// the devices.
+/// </summary>
 public static class Attribution
 {
     /// <summary>Marks the step into an archive in a sighting's path: <c>anna/week.zip!/ride.fit</c>.</summary>
     public const string Inside = "!/";
 
-    /// <summary>The owner by decision alone where there is one, in the roster or not: whoever was told to be wrong stays so. Else whom the folders name.</summary>
+    /// <summary>The owner by decision alone where there is one, in the roster or not: whoever was told to be wrong stays so. Else whom folders, else file names, name.</summary>
     /// <param name="decided">Id of the person to whom the content was assigned, or null.</param>
-    public static IReadOnlyList<string> Claims(string? decided, IEnumerable<string> paths, IReadOnlyDictionary<string, Person> people) =>
-        decided is null ? Claims(paths, people) : [people.GetValueOrDefault(decided)?.Id ?? decided];
+    /// <returns>Ids, sorted; empty where nobody is named.</returns>
+    public static IReadOnlyList<string> Claims(string? decided, IReadOnlyCollection<SeenName> names, WorkingConfiguration configuration)
+    {
+        if (decided is not null)
+        {
+            return [configuration.People.GetValueOrDefault(decided)?.Id ?? decided];
+        }
+
+        var byFolder = ByFolder(names.Select(name => name.Path), configuration.People);
+        return byFolder.Count > 0 ? byFolder : ByFileName(names, configuration);
+    }
 
     /// <summary>Ids of the people whom any folder of any path names, sorted; folders inside archives count, file names do not.</summary>
     /// <param name="paths">Paths below their inbox, <c>/</c> between folders.</param>
-    public static IReadOnlyList<string> Claims(IEnumerable<string> paths, IReadOnlyDictionary<string, Person> people) =>
-        paths.SelectMany(Folders)
-            .Select(folder => people.GetValueOrDefault(folder)?.Id)
-            .OfType<string>()
-            .Distinct(StringComparer.Ordinal)
-            .Order(StringComparer.Ordinal)
-            .ToList();
+    public static IReadOnlyList<string> ByFolder(IEnumerable<string> paths, IReadOnlyDictionary<string, Person> people) =>
+        Ids(paths.SelectMany(Folders).Select(folder => people.GetValueOrDefault(folder)));
+
+    /// <summary>Ids of the people who had the devices on the dates of the recordings, sorted; empty where any recording has no owner by its device.</summary>
+    /// <param name="now">Recordings without a plausible date at this moment are passed over.</param>
+    public static IReadOnlyList<string> ByDevice(IEnumerable<Recording> recordings, Instant now, DeviceBook devices, IReadOnlyDictionary<string, Person> people)
+    {
+        var owners = recordings.Where(recording => ArrivalVerdict.IsUsable(recording, now)).Select(recording => Owners(recording, devices, people)).ToList();
+        return owners.Exists(those => those.Count == 0) ? [] : Ids(owners.SelectMany(those => those));
+    }
+
+    private static IReadOnlyList<string> ByFileName(IReadOnlyCollection<SeenName> names, WorkingConfiguration configuration)
+    {
+        var patterns = configuration.Inboxes.Where(inbox => inbox.FilePattern is not null).ToDictionary(inbox => inbox.Name, inbox => inbox.FilePattern!, StringComparer.Ordinal);
+        return Ids(names
+            .Where(name => patterns.ContainsKey(name.Inbox))
+            .SelectMany(name => name.Path.Split(Inside).Select(stretch => patterns[name.Inbox].Find(stretch[(stretch.LastIndexOf('/') + 1)..], configuration.Subjects))));
+    }
+
+    /// <summary>The date of a recording is one of its owner's: each candidate is asked by the clock of the recording, else of the own zone.</summary>
+    private static List<Person?> Owners(Recording recording, DeviceBook devices, IReadOnlyDictionary<string, Person> people) =>
+        recording.Device.Serial is { } number && number.ToString(System.Globalization.CultureInfo.InvariantCulture) is var serial
+            ? [.. devices.PeopleOf(serial).Select(id => people.GetValueOrDefault(id)).Where(person => person is not null && devices.On(serial, Activities.LocalStart.Of(recording, person).Date, session: null) == person.Id)]
+            : [];
+
+    private static IReadOnlyList<string> Ids(IEnumerable<Person?> people) =>
+        [.. people.OfType<Person>().Select(person => person.Id).Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal)];
 
     private static IEnumerable<string> Folders(string path) =>
         path.Split(Inside).SelectMany(stretch => stretch.Split('/').SkipLast(1));

@@ -3,9 +3,9 @@ using LoadWatch.Alerts;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Explain;
 using LoadWatch.Service.Export;
+using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Decisions;
-using NodaTime;
 
 namespace LoadWatch.Service.Commands;
 
@@ -48,25 +48,19 @@ public static class AckCommand
             return null;
         }
 
-        var zone = configuration.People.GetValueOrDefault(alert.Key.Person)?.Zone ?? DateTimeZone.Utc;
-        var review = AlertReview.Acknowledge(alert, circumstances.Now.InZone(zone).Date, id => session.Alerts.Changes.NextSequence(id) - 1);
-        if (review is not { Changes: [var change], Alerts: [var changed] })
+        var decision = new Decision(DecisionKind.Acknowledge, alertId, alert.Key.Person, circumstances.Now, circumstances.By, circumstances.Note);
+        if (!new DecisionEffects(configuration, session).Make(decision))
         {
-            return AlreadySaid(alert, session.Decisions.OfAlert(alertId));
+            return AlreadySaid(alert, DecisionTable.InForce(session.Decisions.OfAlert(alertId)));
         }
 
-        session.Decisions.Add(new Decision(
-            DecisionKind.Acknowledge, alertId, alert.Key.Person, circumstances.Now, circumstances.By, circumstances.Note));
-        session.Alerts.Put(changed);
-        session.Alerts.Changes.Append(change);
-        session.Audits.Add("acknowledged", alertId, circumstances.Now);
         return $"Acknowledged: {alert.Text}";
     }
 
     private static string AlreadySaid(Alert alert, IReadOnlyList<Decision> decisions) =>
-        (alert.State, decisions) switch
+        (alert.State, decisions.LastOrDefault(decision => decision.Kind == DecisionKind.Acknowledge)) switch
         {
-            (AlertState.Acknowledged, [.., var last]) => $"Already acknowledged{DecisionText.Circumstances(last)}",
+            (AlertState.Acknowledged, { } last) => $"Already acknowledged{DecisionText.Circumstances(last)}",
             _ => $"Nothing to acknowledge: the alert is {Words.Of(alert.State)}.",
         };
 }

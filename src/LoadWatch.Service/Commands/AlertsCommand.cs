@@ -51,11 +51,13 @@ public static class AlertsCommand
         foreach (var alert in alerts)
         {
             Console.Out.WriteLine(
-                $"{configuration.People[alert.Key.Person].Name}: {Words.Of(alert.Severity)}, {Words.Of(alert.State)}, raised {Words.Date(alert.Raised)}");
+                $"{configuration.People[alert.Key.Person].Name}: {Words.Of(alert.Severity)}, {Words.Of(alert.State)}{Shelved(alert)}, raised {Words.Date(alert.Raised)}");
             Console.Out.WriteLine($"    {alert.Text}");
             Console.Out.WriteLine($"    {alert.Id}");
         }
 
         Console.Out.WriteLine("loadwatch explain ID prints the numbers behind one.");
     }
+
+    private static string Shelved(Alert alert) => alert.ShelvedUntil is { } until ? $", shelved until {Words.Date(until)}" : "";
 }

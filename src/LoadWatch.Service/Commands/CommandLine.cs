@@ -62,6 +62,8 @@ public static class CommandLine
         PeopleCommand.Create(),
         AlertsCommand.Create(),
         AckCommand.Create(),
+        ShelveCommand.Create(),
+        AwayCommand.Create(),
         AssignCommand.Create(),
         ExplainCommand.Create(),
         InspectCommand.Create(),

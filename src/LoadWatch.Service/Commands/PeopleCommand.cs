@@ -2,8 +2,11 @@ using System.CommandLine;
 using System.Text.Json;
 using LoadWatch.Days;
 using LoadWatch.People;
+using LoadWatch.Plans;
 using LoadWatch.Service.Export;
+using LoadWatch.Service.Pipeline;
 using LoadWatch.Stimulus;
+using NodaTime;
 using Spectre.Console;
 
 namespace LoadWatch.Service.Commands;
@@ -23,10 +26,15 @@ public static class PeopleCommand
     private static int Run(string configPath, bool json)
     {
         using var workplace = Workplace.OpenToRead(configPath);
-        var lines = workplace.Store.Read(session => workplace.Configuration.People.Values
-            .OrderBy(person => person.Id, StringComparer.Ordinal)
-            .Select(person => Line(person, LastDay.Of(session, person.Id)))
-            .ToList());
+        var now = MachineClock.Now();
+        var lines = workplace.Store.Read(session =>
+        {
+            var plans = new PersonPlans(workplace.Configuration).Of(session);
+            return workplace.Configuration.People.Values
+                .OrderBy(person => person.Id, StringComparer.Ordinal)
+                .Select(person => Line(person, LastDay.Of(session, person.Id), AbsenceOn(plans[person.Id], now.InZone(person.Zone).Date)))
+                .ToList();
+        });
         if (json)
         {
             Console.Out.WriteLine(JsonSerializer.Serialize(lines, Words.Json));
@@ -39,7 +47,10 @@ public static class PeopleCommand
         return ExitCode.Ok;
     }
 
-    private static PersonLine Line(Person person, Day? last) => new(
+    /// <summary>The console is the operator's: it shows the true word.</summary>
+    private static Absence? AbsenceOn(PersonPlan plan, LocalDate today) => plan.Absences.FirstOrDefault(absence => absence.Covers(today));
+
+    private static PersonLine Line(Person person, Day? last, Absence? absence) => new(
         person.Id,
         person.Name,
         person.Group,
@@ -48,11 +59,14 @@ public static class PeopleCommand
         last?.Acute,
         last?.RatioUncoupled,
         last?.Coverage28,
-        last is not null && last.Regions.TryGetValue(BodyRegion.Legs, out var legs) ? legs.DaysSince : null);
+        last is not null && last.Regions.TryGetValue(BodyRegion.Legs, out var legs) ? legs.DaysSince : null,
+        absence is null ? null : Words.Of(absence.Word),
+        absence is null ? null : Words.Date(absence.From),
+        absence?.Until is { } until ? Words.Date(until) : null);
 
     private static void Print(List<PersonLine> lines)
     {
-        var table = new Table().AddColumns("person", "name", "group", "last", "week", "ratio", "known", "legs");
+        var table = new Table().AddColumns("person", "name", "group", "last", "week", "ratio", "known", "legs", "absence");
         foreach (var line in lines)
         {
             table.AddRow(
@@ -63,7 +77,8 @@ public static class PeopleCommand
                 line.WeekLoad is { } load ? FormattableString.Invariant($"{load:0}") : "?",
                 line.RatioUncoupled is { } ratio ? FormattableString.Invariant($"{ratio:0.00}") : "?",
                 line.Coverage28 is { } coverage ? FormattableString.Invariant($"{100 * coverage:0} %") : "?",
-                line.DaysSinceHeavyOrFastLegs is { } days ? FormattableString.Invariant($"{days} days") : "?");
+                line.DaysSinceHeavyOrFastLegs is { } days ? FormattableString.Invariant($"{days} days") : "?",
+                line.Absence is { } word ? $"{word} since {line.AbsentSince}{(line.AbsentUntil is { } until ? $" until {until}" : "")}" : "");
         }
 
         TableOutput.Write(table);
@@ -81,5 +96,8 @@ public static class PeopleCommand
         double? WeekLoad,
         double? RatioUncoupled,
         double? Coverage28,
-        int? DaysSinceHeavyOrFastLegs);
+        int? DaysSinceHeavyOrFastLegs,
+        string? Absence,
+        string? AbsentSince,
+        string? AbsentUntil);
 }

@@ -6,12 +6,13 @@ using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
 using LoadWatch.Loads;
 using LoadWatch.People;
+using LoadWatch.Service.Arrivals;
 using LoadWatch.Stimulus;
 using NodaTime;
 
 namespace LoadWatch.Service.Configuration;
 
-/// <summary>Reads and checks <c>loadwatch.json</c>, the roster and the anchors before anything else is touched.</summary>
+/// <summary>Reads and checks <c>loadwatch.json</c>, the roster, the anchors and the devices before anything else is touched.</summary>
 public sealed class ConfigurationReader
 {
     private readonly string path;
@@ -42,6 +43,7 @@ public sealed class ConfigurationReader
             HeartRateReserveBounds = Ascending(file.Computation.HeartRateReserveBounds, "$.computation.heart_rate_reserve_bounds"),
             PowerBounds = Ascending(file.Computation.PowerBounds, "$.computation.power_bounds"),
             SpeedBounds = Ascending(file.Computation.SpeedBounds, "$.computation.speed_bounds"),
+            SpeedMaxShares = Shares(file.Computation.SpeedMaxShares, "$.computation.speed_max_shares"),
             Exercises = exercises,
             Sports = Regions(file.Computation.Sports, DefaultRegions.Sports, "$.computation.sports"),
         };
@@ -53,6 +55,7 @@ public sealed class ConfigurationReader
         var roster = faults.Collect(() => RosterReader.Read(Resolve(file.Roster), file.Roster, groups.Keys.ToList(), zone));
         var people = (roster ?? []).ToDictionary(person => person.Id, StringComparer.OrdinalIgnoreCase);
         var anchors = faults.Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList()));
+        var devices = faults.Collect(() => roster is null || !HasDevices(file) ? DeviceBook.Empty : DevicesReader.Read(Resolve(file.Devices), file.Devices, people));
         var contacts = ContactsReader.Read(file, groups, roster is null ? null : people, zone, faults);
         var mail = new MailReader(Resolve, faults.Add).Read(file);
         faults.Stop();
@@ -77,6 +80,8 @@ public sealed class ConfigurationReader
             file.Intake.LargestFileMegabytes * 1024L * 1024L)
         {
             Mail = mail,
+            Devices = devices!,
+            Subjects = new Subjects(people, groups, devices!),
         };
     }
 
@@ -120,19 +125,33 @@ public sealed class ConfigurationReader
         var groups = new Dictionary<string, Group>(StringComparer.Ordinal);
         foreach (var (entry, i) in file.Groups.Select((entry, i) => (entry, i)))
         {
-            faults.CheckWords([entry.LoadQuantity], QuantityNames.AllWith(file.Computation.SpeedBounds), $"$.groups[{i}].load_quantity", "a quantity");
+            CheckLoad(entry, QuantityNames.AllWith(file.Computation.SpeedBounds, file.Computation.SpeedMaxShares), $"$.groups[{i}]");
             if (entry.Limits is not null)
             {
                 CheckLimits(limits[i], $"$.groups[{i}].limits");
             }
 
-            if (!groups.TryAdd(entry.Id, new Group(entry.Id, entry.Name.Length > 0 ? entry.Name : entry.Id, entry.LoadQuantity, limits[i])))
+            var group = new Group(entry.Id, entry.Name.Length > 0 ? entry.Name : entry.Id, entry.LoadQuantity, limits[i])
+            {
+                LoadFallbacks = entry.LoadFallbacks,
+            };
+            if (!groups.TryAdd(entry.Id, group))
             {
                 faults.Add($"$.groups[{i}].id", $"the group \"{entry.Id}\" stands above already");
             }
         }
 
         return groups;
+    }
+
+    private void CheckLoad(GroupEntry entry, IReadOnlyList<string> known, string at)
+    {
+        faults.CheckWords([entry.LoadQuantity], known, $"{at}.load_quantity", "a quantity");
+        faults.CheckWords(entry.LoadFallbacks, known, $"{at}.load_fallbacks", "a quantity");
+        if (entry.LoadFallbacks.Contains(entry.LoadQuantity, StringComparer.Ordinal))
+        {
+            faults.Add($"{at}.load_fallbacks", $"\"{entry.LoadQuantity}\" is the group's load itself");
+        }
     }
 
     private void CheckLimits(RuleLimits limits, string at)
@@ -166,6 +185,17 @@ public sealed class ConfigurationReader
         return bounds;
     }
 
+    private IReadOnlyList<double> Shares(IReadOnlyList<double> shares, string at)
+    {
+        var outside = shares.Any(share => share is < SpeedMaxShares.Lowest or > SpeedMaxShares.Highest);
+        if (outside || shares.Zip(shares.Skip(1)).Any(pair => pair.First >= pair.Second))
+        {
+            faults.Add(at, "the shares must rise and lie in 0.5 to 1");
+        }
+
+        return shares;
+    }
+
     private void CheckLayouts(IReadOnlyList<CsvLayout> layouts)
     {
         foreach (var (layout, i) in layouts.Select((layout, i) => (layout, i)))
@@ -184,8 +214,12 @@ public sealed class ConfigurationReader
             Encoding.UTF8.GetString(json),
             TableFile.TextOf(Resolve(file.Roster), file.Roster),
             TableFile.TextOf(Resolve(file.Anchors), file.Anchors));
+        text += HasDevices(file) ? $"\n{TableFile.TextOf(Resolve(file.Devices), file.Devices)}" : "";
         return (Convert.ToHexStringLower(SHA256.HashData(Encoding.UTF8.GetBytes(text))), text);
     }
+
+    /// <summary>Only under its usual name may the file be missing: another name was written on purpose.</summary>
+    private bool HasDevices(LoadWatchFile file) => file.Devices != LoadWatchFile.DefaultDevices || File.Exists(Resolve(file.Devices));
 
     private string Resolve(string relative) => System.IO.Path.GetFullPath(System.IO.Path.Combine(folder, relative));
 

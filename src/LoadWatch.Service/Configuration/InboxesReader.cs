@@ -1,3 +1,5 @@
+using LoadWatch.Service.Arrivals;
+
 namespace LoadWatch.Service.Configuration;
 
 /// <summary>Reads the inboxes of <c>loadwatch.json</c>.</summary>
@@ -6,12 +8,17 @@ internal static class InboxesReader
     /// <param name="resolve">From a path of the file to a full one.</param>
     public static List<Inbox> Read(LoadWatchFile file, Func<string, string> resolve, FaultList faults)
     {
-        var inboxes = file.Inboxes.Select(entry => new Inbox(entry.Name, resolve(entry.Path), entry.Take)).ToList();
+        var inboxes = file.Inboxes.Select(entry => new Inbox(entry.Name, resolve(entry.Path), entry.Take) { FilePattern = FilePattern.Parse(entry.FilePattern) }).ToList();
         foreach (var (entry, i) in inboxes.Select((entry, i) => (entry, i)))
         {
             if (inboxes.Take(i).Any(above => above.Name == entry.Name))
             {
                 faults.Add($"$.inboxes[{i}].name", $"the inbox \"{entry.Name}\" stands above already");
+            }
+
+            if (entry.FilePattern is null && file.Inboxes[i].FilePattern is { Length: > 0 } pattern)
+            {
+                faults.Add($"$.inboxes[{i}].file_pattern", $"\"{pattern}\" must hold {{person}} once and no folder");
             }
 
             // What the service writes would come in again as new files.

@@ -33,7 +33,8 @@ public static class KeyCheck
             return [(path, $"\"{property.Name}\" is not a key here{Nearest.Hint(property.Name, type.Properties.Select(candidate => candidate.Name))}")];
         }
 
-        return property.Value.ValueKind == JsonValueKind.Null && known.IsSetNullable ? [] : Walk(property.Value, Info(known.PropertyType), path);
+        var plain = Nullable.GetUnderlyingType(known.PropertyType) ?? known.PropertyType;
+        return property.Value.ValueKind == JsonValueKind.Null && known.IsSetNullable ? [] : Walk(property.Value, Info(plain), path);
     }
 
     private static JsonTypeInfo Info(Type type) => ConfigurationJson.Options.GetTypeInfo(type);

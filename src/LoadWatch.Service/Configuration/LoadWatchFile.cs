@@ -23,11 +23,16 @@ public sealed record LoadWatchFile
     /// <summary>Folder of the notice files, one per month.</summary>
     public string Notices { get; init; } = "notices";
 
-    /// <summary>Who is watched: a CSV with the columns person, name, group, birth_year, sex, time_zone.</summary>
+    /// <summary>Who is watched: a CSV with the columns person, name, group, birth_year, sex, time_zone, aliases, heart_rate_valid.</summary>
     public string Roster { get; init; } = "roster.csv";
 
     /// <summary>Personal reference values: a CSV with the columns person, date, anchor, value, unit, source, exercise.</summary>
     public string Anchors { get; init; } = "anchors.csv";
+
+    /// <summary>Devices that are handed out: a CSV with the columns serial, person, from, to, session. It may be missing.</summary>
+    public string Devices { get; init; } = DefaultDevices;
+
+    internal const string DefaultDevices = "devices.csv";
 
     /// <summary>IANA zone of people and contacts that name none; blank takes the zone of this machine.</summary>
     public string TimeZone { get; init; } = "";
@@ -70,6 +75,9 @@ public sealed record InboxEntry
 
     /// <summary>Whether files stay (<c>leave</c>) or go once their effects are durable (<c>move</c>).</summary>
     public TakeMode Take { get; init; } = TakeMode.Leave;
+
+    /// <summary>How file names tell whose a file is, where no folder does: {person} once, and * for any text, ? for one character; blank: not at all.</summary>
+    public string FilePattern { get; init; } = "";
 }
 
 public enum TakeMode
@@ -89,10 +97,17 @@ public sealed record GroupEntry
     public string Name { get; init; } = "";
 
     /// <summary>
-    /// The quantity that is this group's load: banister_trimp, edwards_load, lucia_load, stagno_load, individual_trimp, minutes, distance,
-    /// distance_above_5_5_m_s, distance_above_7_m_s (of the speed bounds from 5.5 on), climb, work, sets, repetitions or kilograms.
+    /// The quantity that is this group's load: banister_trimp, edwards_load, lucia_load, stagno_load, individual_trimp, foster_load, minutes, distance,
+    /// distance_above_5_5_m_s, distance_above_7_m_s (of the speed bounds from 5.5 on), distance_above_80_percent_speed_max,
+    /// distance_above_90_percent_speed_max (of the shares of the best speed), accelerations, decelerations, climb, work, sets, repetitions or kilograms.
     /// </summary>
     public string LoadQuantity { get; init; } = "banister_trimp";
+
+    /// <summary>
+    /// Quantities that stand in for it, first choice first, where a session lacks it: converted by the person's own sessions that have both, 10 of them
+    /// at least.
+    /// </summary>
+    public IReadOnlyList<string> LoadFallbacks { get; init; } = [];
 
     /// <summary>Limits that differ from the common ones; only the keys that differ.</summary>
     public RuleLimits? Limits { get; init; }
@@ -151,6 +166,9 @@ public sealed record ComputationEntry
 
     /// <summary>Inner bounds of the speed zones, m/s.</summary>
     public IReadOnlyList<double> SpeedBounds { get; init; } = [2, 4, 5.5, 7];
+
+    /// <summary>Shares of the person's best speed (the anchor speed_max) from which distance counts apart, 0.5 to 1, rising.</summary>
+    public IReadOnlyList<double> SpeedMaxShares { get; init; } = [0.8, 0.9];
 
     /// <summary>Body regions by exercise, added to the shipped table or replacing its entries: legs, trunk, arms.</summary>
     public IReadOnlyDictionary<string, IReadOnlyList<string>> Exercises { get; init; } = new Dictionary<string, IReadOnlyList<string>>();

@@ -2,14 +2,15 @@ using System.Globalization;
 using System.Text.RegularExpressions;
 using LoadWatch.People;
 using NodaTime;
+using NodaTime.Text;
 
 namespace LoadWatch.Service.Configuration;
 
-/// <summary>Reads <c>roster.csv</c>: person, name, group, birth_year, sex, time_zone.</summary>
+/// <summary>Reads <c>roster.csv</c>: person, name, group, birth_year, sex, time_zone, aliases, heart_rate_valid.</summary>
 public static partial class RosterReader
 {
     private static readonly string[] Required = ["person", "name", "group"];
-    private static readonly string[] Optional = ["birth_year", "sex", "time_zone"];
+    private static readonly string[] Optional = ["birth_year", "sex", "time_zone", "aliases", "heart_rate_valid"];
 
     /// <param name="groups">Ids of the groups that exist.</param>
     /// <param name="zone">Zone of people whose row names none.</param>
@@ -23,6 +24,7 @@ public static partial class RosterReader
             .GroupBy(row => row["person"], StringComparer.OrdinalIgnoreCase)
             .SelectMany(same => same.Skip(1))
             .Select(row => row.Fault($"\"{row["person"]}\" stands above already")));
+        faults.AddRange(AliasFaults(table.Rows.Zip(people).ToList()));
         return faults.Count == 0 ? people : throw new ConfigurationException(faults.OrderBy(fault => fault.Line).ToList());
     }
 
@@ -44,7 +46,54 @@ public static partial class RosterReader
             faults.Add(row.Fault($"group: \"{group}\" is not a group of loadwatch.json{Nearest.Hint(group, groups)}"));
         }
 
-        return new Person(id, row["name"] ?? id, group, BirthYear(row, faults), SexOf(row, faults), ZoneOf(row, zone, faults));
+        return new Person(id, row["name"] ?? id, group, BirthYear(row, faults), SexOf(row, faults), ZoneOf(row, zone, faults))
+        {
+            Aliases = Aliases(row),
+            HeartRateInvalidFrom = HeartRateInvalidFrom(row, faults),
+        };
+    }
+
+    private static IReadOnlyList<string> Aliases(TableRow row) =>
+        [.. (row["aliases"] ?? "").Split([';', '|'], StringSplitOptions.RemoveEmptyEntries | StringSplitOptions.TrimEntries).Distinct(StringComparer.OrdinalIgnoreCase)];
+
+    /// <summary>An alias that another one has too, as id or alias, would tell nobody.</summary>
+    private static IEnumerable<ConfigurationFault> AliasFaults(List<(TableRow Row, Person Person)> rows)
+    {
+        var taken = new Dictionary<string, string>(StringComparer.OrdinalIgnoreCase);
+        foreach (var (_, person) in rows)
+        {
+            taken.TryAdd(person.Id, person.Id);
+        }
+
+        foreach (var (row, person) in rows)
+        {
+            foreach (var alias in person.Aliases.Where(alias => !taken.TryAdd(alias, person.Id) && !string.Equals(taken[alias], person.Id, StringComparison.OrdinalIgnoreCase)))
+            {
+                yield return row.Fault($"aliases: \"{alias}\" already means {taken[alias]}");
+            }
+        }
+    }
+
+    /// <summary>The fault does not repeat what stands there: a reason belongs nowhere, not even in a log.</summary>
+    private static LocalDate? HeartRateInvalidFrom(TableRow row, List<ConfigurationFault> faults)
+    {
+        const string Since = "no since ";
+        var text = (row["heart_rate_valid"] ?? "yes").ToLowerInvariant();
+        switch (text)
+        {
+            case "yes":
+                return null;
+            case "no":
+                return LocalDate.MinIsoValue;
+            default:
+                if (text.StartsWith(Since, StringComparison.Ordinal) && LocalDatePattern.Iso.Parse(text[Since.Length..].Trim()) is { Success: true, Value: var from })
+                {
+                    return from;
+                }
+
+                faults.Add(row.Fault("heart_rate_valid: holds yes, no, or no since 2026-03-01, and never a reason"));
+                return null;
+        }
     }
 
     private static int? BirthYear(TableRow row, List<ConfigurationFault> faults)

@@ -2,14 +2,15 @@ using LoadWatch.Activities;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Delivery.Mail;
 using LoadWatch.People;
+using LoadWatch.Service.Arrivals;
 using NodaTime;
 
 namespace LoadWatch.Service.Configuration;
 
 /// <summary>The configuration as the service works with it: checked, paths resolved, one snapshot for a whole sweep.</summary>
 /// <param name="Folder">Absolute folder of <c>loadwatch.json</c>.</param>
-/// <param name="Hash">SHA-256 over the three files, 64 hex digits.</param>
-/// <param name="Text">The three files, one after the other, as kept in <c>config_version</c>.</param>
+/// <param name="Hash">SHA-256 over the files of the configuration, 64 hex digits.</param>
+/// <param name="Text">Those files, one after the other, as kept in <c>config_version</c>.</param>
 /// <param name="People">By id, compared without regard to case, in roster order.</param>
 /// <param name="Groups">By id.</param>
 public sealed record WorkingConfiguration(
@@ -33,6 +34,12 @@ public sealed record WorkingConfiguration(
     /// <summary>The mail server; null when there is none.</summary>
     public MailSettings? Mail { get; init; }
 
+    /// <summary>Devices that are handed out; empty without <c>devices.csv</c>.</summary>
+    public DeviceBook Devices { get; init; } = DeviceBook.Empty;
+
+    /// <summary>Finds people and groups by how they are written.</summary>
+    public required Subjects Subjects { get; init; }
+
     /// <summary>The people whom a contact's brief is about, sorted by id.</summary>
     public IEnumerable<Person> PeopleOf(Contact contact) =>
         People.Values
@@ -44,4 +51,8 @@ public sealed record WorkingConfiguration(
 
 /// <summary>A watched folder.</summary>
 /// <param name="Path">Absolute.</param>
-public sealed record Inbox(string Name, string Path, TakeMode Take);
+public sealed record Inbox(string Name, string Path, TakeMode Take)
+{
+    /// <summary>How file names tell whose a file is; null: they do not.</summary>
+    public FilePattern? FilePattern { get; init; }
+}

@@ -22,10 +22,10 @@ public static class AlertExplanation
     {
         var text = new StringBuilder();
         text.AppendLine(CultureInfo.InvariantCulture, $"{alert.Text}");
-        text.AppendLine(CultureInfo.InvariantCulture, $"{Words.Of(alert.Severity)}, {Words.Of(alert.State)}, raised {Words.Date(alert.Raised)}");
+        text.AppendLine(CultureInfo.InvariantCulture, $"{Words.Of(alert.Severity)}, {Words.Of(alert.State)}{(alert.ShelvedUntil is { } until ? $", shelved until {Words.Date(until)}" : "")}, raised {Words.Date(alert.Raised)}");
         foreach (var decision in decisions)
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"acknowledged{DecisionText.Circumstances(decision)}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"{DecisionText.Sentence(decision, decisions)}");
         }
 
         foreach (var change in changes)

@@ -6,6 +6,7 @@ using LoadWatch.Service.Export;
 using LoadWatch.Stimulus;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Activities;
+using LoadWatch.Storage.Decisions;
 using NodaTime;
 
 namespace LoadWatch.Service.Explain;
@@ -22,13 +23,16 @@ public static class DayExplanation
         }
 
         var day = date is { } wanted ? session.Days.OfPerson(known.Id, wanted, wanted).FirstOrDefault() : LastDay.Of(session, known.Id);
+        var text = new StringBuilder();
         if (day is null)
         {
-            return $"{known.Name}: nothing is computed for {(date is { } missing ? Words.Date(missing) : "any day yet")}.";
+            text.AppendLine(CultureInfo.InvariantCulture, $"{known.Name}: nothing is computed for {(date is { } missing ? Words.Date(missing) : "any day yet")}.");
+            AppendDecisions(text, session, known.Id, date);
+            return text.ToString();
         }
 
-        var text = new StringBuilder();
         text.AppendLine(CultureInfo.InvariantCulture, $"{known.Name}, {Words.Date(day.Date)}: {Words.Of(day.State)}{(day.StateSource is { } source ? $" ({source})" : "")}");
+        AppendDecisions(text, session, known.Id, day.Date);
         AppendTrends(text, day, configuration.Groups[known.Group].LoadQuantity);
         foreach (var activity in session.Activities.OfPerson(known.Id, day.Date, day.Date))
         {
@@ -44,6 +48,28 @@ public static class DayExplanation
 
         return text.ToString();
     }
+
+    /// <summary>What staff said of the date, withdrawn or not: who, when, and why.</summary>
+    private static void AppendDecisions(StringBuilder text, StoreSession session, string person, LocalDate? date)
+    {
+        if (date is not { } day)
+        {
+            return;
+        }
+
+        var decisions = session.Decisions.OfPerson(person);
+        var about = decisions.Where(decision => decision.Subject == person && IsAbout(decision, day)).Select(decision => decision.Id).ToHashSet(StringComparer.Ordinal);
+        foreach (var decision in decisions.Where(decision => about.Contains(decision.Id) || about.Contains(decision.Subject)))
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {DecisionText.Sentence(decision, decisions)}");
+        }
+    }
+
+    private static bool IsAbout(Decision decision, LocalDate day) => decision.From <= day && decision.Kind switch
+    {
+        DecisionKind.Ill or DecisionKind.Injured or DecisionKind.Away => !(day > decision.Until),
+        _ => day <= (decision.Until ?? decision.From),
+    };
 
     private static void AppendTrends(StringBuilder text, Day day, string quantity)
     {

@@ -33,9 +33,10 @@ public static class FileExplanation
             text.AppendLine(CultureInfo.InvariantCulture, $"    came inside {parent[..12]}");
         }
 
-        foreach (var decision in session.Decisions.OfArrival(arrival.Sha))
+        var decisions = session.Decisions.OfArrival(arrival.Sha);
+        foreach (var decision in decisions)
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    assigned to {decision.Person}{DecisionText.Circumstances(decision)}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {DecisionText.Sentence(decision, decisions)}");
         }
 
         foreach (var activity in configuration.People.Keys.SelectMany(id => session.Activities.OfPerson(id)))

@@ -152,5 +152,6 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
         Words.Date(alert.Raised),
         Words.Of(alert.State),
         Words.Of(alert.Severity),
+        alert.ShelvedUntil is { } until ? Words.Date(until) : null,
         alert.Text);
 }

@@ -1,6 +1,9 @@
 using LoadWatch.Activities;
 using LoadWatch.Decoding;
+using LoadWatch.People;
+using LoadWatch.Plans;
 using LoadWatch.Recordings;
+using LoadWatch.Rows;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
@@ -13,13 +16,17 @@ namespace LoadWatch.Service.Pipeline;
 /// <summary>From bytes to a judged arrival with all its values. Pure but for reading the archive; safe to use from several threads.</summary>
 public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSet decoders, Archive archive, Instant now)
 {
+    /// <summary>What tables say that recordings are computed with; the sweep keeps it up to date.</summary>
+    public TableBasis Basis { get; set; } = new(configuration.Anchors, Enumerable.Empty<PlanEntry>().ToLookup(_ => ""));
+
     /// <summary>Never fails for what the content holds: one that breaks the computation is refused, and the others go on (I-10).</summary>
-    /// <param name="claims">Ids of the people whom all sightings of the content name, or the one whom a decision names.</param>
-    public DecodedArrival Decode(ArrivalContent content, IReadOnlyCollection<string> claims)
+    /// <param name="claims">Ids of the people whom all sightings of the content name, or the one whom a decision names; where none, the devices or the content itself tell.</param>
+    /// <param name="decided">A decision names the owner: then nobody asks whether the recordings can be theirs.</param>
+    public DecodedArrival Decode(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided)
     {
         try
         {
-            return DecodeSound(content, claims);
+            return DecodeSound(content, claims, decided);
         }
         catch (Exception e) when (e is ArithmeticException or ArgumentException or InvalidOperationException or IndexOutOfRangeException)
         {
@@ -28,7 +35,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         }
     }
 
-    private DecodedArrival DecodeSound(ArrivalContent content, IReadOnlyCollection<string> claims)
+    private DecodedArrival DecodeSound(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided)
     {
         var kind = Words.Of(content.Kind);
         if (content.Kind is ContentKind.Gzip or ContentKind.Zip)
@@ -37,14 +44,76 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         }
 
         var file = decoders.Decode(content.Bytes);
-        var verdict = OfTheRoster(ArrivalVerdict.Of(file, claims, now));
-        return new DecodedArrival(content.Sha, file.Kind, verdict, verdict.Person is { } person ? Compute(content.Sha, file, person) : []);
+        if (Subjects(file) is { Count: > 0 } subjects && (subjects.Count > 1 || claims.Count == 0))
+        {
+            return OfSeveral(content, file, subjects);
+        }
+
+        var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings, now, configuration.Devices, configuration.People);
+        var verdict = OfTheRoster(ArrivalVerdict.Of(file, owners, now));
+        if (!decided && Implausible(file, verdict) is { } reason)
+        {
+            verdict = new ArrivalVerdict(ArrivalState.Held, reason, null);
+        }
+
+        var recordings = verdict.Person is { } owner && file.Table is null ? Usable(file).Select(recording => Compute(content.Sha, recording, configuration.People[owner], file.SourceName)) : [];
+        return new DecodedArrival(content.Sha, file.Kind, verdict, recordings.ToList())
+        {
+            Table = verdict.State == ArrivalState.Stored ? file.Table : null,
+        };
     }
+
+    private static List<string> Subjects(DecodedFile file) =>
+        [.. file.Recordings.Select(recording => recording.Subject).OfType<string>().Distinct(StringComparer.Ordinal)];
+
+    /// <summary>A file of several people: each recording is its person's; those of nobody are asked about and leave the others alone.</summary>
+    private DecodedArrival OfSeveral(ArrivalContent content, DecodedFile file, IReadOnlyList<string> subjects)
+    {
+        var owned = Usable(file).Select(recording => (Recording: recording, Person: OwnerOf(recording))).ToList();
+        var recordings = new List<ComputedRecording>();
+        var questions = new List<string>();
+        foreach (var (recording, person) in owned)
+        {
+            var implausible = person is null ? null : Plausibility.Of(recording, person, Basis.Anchors, LocalStart.Of(recording, person).Date);
+            if (person is null)
+            {
+                questions.Add($"\"{recording.Subject}\" is not in the roster: a line there, an alias or a line in devices.csv takes the recording up");
+            }
+            else if (implausible is not null)
+            {
+                questions.Add($"the recording of \"{recording.Subject}\" is left out: {implausible}");
+            }
+            else
+            {
+                recordings.Add(Compute(content.Sha, recording, person, file.SourceName));
+            }
+        }
+
+        var asked = questions.Distinct(StringComparer.Ordinal).ToList();
+        var verdict = recordings.Count > 0
+            ? new ArrivalVerdict(ArrivalState.Stored, asked.Concat(file.Problems.Select(problem => problem.ToString())).FirstOrDefault(), null)
+            : new ArrivalVerdict(ArrivalState.Held, owned.Count == 0 ? "no recording with a date" : $"owner unknown: none of the {subjects.Count} people in it is in the roster", null);
+        return new DecodedArrival(content.Sha, file.Kind, verdict, recordings)
+        {
+            Questions = recordings.Count > 0 ? asked : [],
+            From = owned.Count == 0 ? null : owned.Min(one => one.Recording.Start!.Value.InUtc().Date),
+        };
+    }
+
+    private Person? OwnerOf(Recording recording) =>
+        recording.Subject is { } subject ? configuration.Subjects.Find(subject, recording.Start!.Value.InUtc().Date) : null;
+
+    private IEnumerable<Recording> Usable(DecodedFile file) => file.Recordings.Where(recording => ArrivalVerdict.IsUsable(recording, now));
+
+    /// <summary>Why a file cannot be its owner's, by the first of its recordings that says so.</summary>
+    private string? Implausible(DecodedFile file, ArrivalVerdict verdict) => verdict.Person is { } id && configuration.People.TryGetValue(id, out var person)
+        ? Usable(file).Select(recording => Plausibility.Of(recording, person, Basis.Anchors, LocalStart.Of(recording, person).Date)).FirstOrDefault(reason => reason is not null)
+        : null;
 
     /// <summary>Folders only name people of the roster; one whom a decision names may have left it since.</summary>
     private ArrivalVerdict OfTheRoster(ArrivalVerdict verdict) =>
         verdict.Person is { } person && !configuration.People.ContainsKey(person)
-            ? new ArrivalVerdict(ArrivalState.Held, $"assigned to {person}, who is not in the roster", null)
+            ? new ArrivalVerdict(ArrivalState.Held, AssignedFiles.NotInTheRoster(person), null)
             : verdict;
 
     /// <summary>The content of a known arrival, read back from the archive: the object itself, or the member of it that has this hash.</summary>
@@ -53,24 +122,29 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         ArrivalContent.Expand(decoders, arrival.ObjectSha, path, archive.Read(arrival.ObjectSha)).FirstOrDefault(content => content.Sha == arrival.Sha)
         ?? throw new InvalidDataException($"the archive object {arrival.ObjectSha[..12]} no longer holds {arrival.Sha[..12]}");
 
+    /// <summary>What a stored table holds.</summary>
+    /// <exception cref="InvalidDataException">The archive does not hold it any more, or it is no table as layouts are now.</exception>
+    public DecodedTable ReadTable(Arrival arrival) =>
+        decoders.Decode(Read(arrival, "").Bytes).Table ?? throw new InvalidDataException($"{arrival.Sha[..12]} is no table");
+
     /// <summary>Computes the values of one recording of a stored arrival again.</summary>
-    public ActivityValues Recompute(Arrival arrival, int part)
+    public ActivityValues Recompute(Arrival arrival, int part, string person)
     {
         var file = decoders.Decode(Read(arrival, "").Bytes);
         var recording = file.Recordings.First(candidate => candidate.Part == part);
-        return ActivityComputation.Compute(
-            recording, configuration.People[arrival.Person!], configuration.Anchors, configuration.Computation);
+        return Values(recording, configuration.People[person]);
     }
 
-    private List<ComputedRecording> Compute(string sha, DecodedFile file, string personId)
+    private ComputedRecording Compute(string sha, Recording recording, Person person, string? sourceName) =>
+        new(RecordingSummaries.Of(sha, recording, person, sourceName), Values(recording, person));
+
+    /// <summary>Of the part of the recording that lies within the planned session, where the plan has its time.</summary>
+    private ActivityValues Values(Recording recording, Person person)
     {
-        var person = configuration.People[personId];
-        return file.Recordings
-            .Where(recording => ArrivalVerdict.IsUsable(recording, now))
-            .Select(recording => new ComputedRecording(
-                RecordingSummaries.Of(sha, recording, person, file.SourceName),
-                ActivityComputation.Compute(recording, person, configuration.Anchors, configuration.Computation)))
-            .ToList();
+        var planned = Basis.Planned(person, LocalStart.Of(recording, person).Date);
+        var cut = SessionWindow.Of(recording, planned) is { } window ? RecordingCut.To(recording, window.Start, window.End) : new CutRecording(recording, []);
+        var values = ActivityComputation.Compute(cut.Recording, person, Basis.Anchors, configuration.Computation);
+        return cut.LeftOut.Count == 0 ? values : values with { Remarks = [.. cut.LeftOut, .. values.Remarks] };
     }
 
     private static ArrivalVerdict ContainerVerdict(ArrivalContent content) => (content.Members, content.Problems.Count) switch

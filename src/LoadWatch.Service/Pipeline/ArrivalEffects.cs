@@ -13,18 +13,25 @@ public sealed class ArrivalEffects(StoreSession session, ArrivalDecoder decoder)
 
     public void Apply(DecodedArrival arrival)
     {
-        if (session.Arrivals.Get(arrival.Sha) is { State: ArrivalState.Stored, Person: { } before })
+        foreach (var recording in session.Recordings.OfArrival(arrival.Sha))
         {
-            foreach (var recording in session.Recordings.OfArrival(arrival.Sha))
-            {
-                MarkDirty(recording);
-            }
-
-            session.Recordings.RemoveArrival(arrival.Sha);
-            touched.Add(before);
+            MarkDirty(recording);
+            touched.Add(recording.Person);
         }
 
+        session.Recordings.RemoveArrival(arrival.Sha);
+        session.Questions.Ask(arrival.Sha, arrival.From, arrival.Questions);
+
         session.Arrivals.Settle(arrival.Sha, arrival.Verdict.State, arrival.Kind, arrival.Verdict.Reason, arrival.Verdict.Person);
+        if (arrival.Table is { } table)
+        {
+            session.TableVersions.Note(arrival.Sha, table.Layout, table.IsNamedByFolder);
+        }
+        else
+        {
+            session.TableVersions.Forget(arrival.Sha);
+        }
+
         foreach (var recording in arrival.Recordings)
         {
             session.Recordings.Add(recording.Summary);
@@ -68,7 +75,7 @@ public sealed class ArrivalEffects(StoreSession session, ArrivalDecoder decoder)
 
     /// <summary>Values computed in this group, else computed again from the archive: a recording that lost before has none stored.</summary>
     private ActivityValues ValuesOf(RecordingSummary recording) =>
-        values.TryGetValue(recording.Key, out var fresh) ? fresh : decoder.Recompute(session.Arrivals.Get(recording.Sha)!, recording.Part);
+        values.TryGetValue(recording.Key, out var fresh) ? fresh : decoder.Recompute(session.Arrivals.Get(recording.Sha)!, recording.Part, recording.Person);
 
     private void MarkDirty(RecordingSummary recording) => session.People.MarkDirty(recording.Person, recording.Date);
 }

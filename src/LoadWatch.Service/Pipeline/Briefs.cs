@@ -136,7 +136,12 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     }
 
     private List<BriefLine> Questions(StoreSession session, Contact contact) =>
-        [.. MissedNotices.Lines(session, contact, Ways(contact), now), .. Files(session, contact)];
+        
+    [
+        .. MissedNotices.Lines(session, contact, Ways(contact), now),
+        .. Files(session, contact),
+        .. new OpenQuestions(configuration).Lines(session, contact, now.InZone(contact.Zone).Date),
+    ];
 
     private List<BriefLine> Files(StoreSession session, Contact contact)
     {
@@ -144,19 +149,19 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         return session.Arrivals.InState(ArrivalState.Held)
             .Concat(session.Arrivals.InState(ArrivalState.Refused))
             .Select(arrival => (arrival, Sightings: session.Sightings.Of(arrival.Sha)))
-            .Where(item => Concerns(item.Sightings.Select(sighting => sighting.Path), contact, people) && (item.arrival.State == ArrivalState.Held || IsRecent(item.Sightings)))
+            .Where(item => Concerns(Claims(item.Sightings), contact, people) && (item.arrival.State == ArrivalState.Held || IsRecent(item.Sightings)))
             .Select(item => new BriefLine(item.Sightings[0].Path, Sentence(item.arrival)))
-            .Concat(unreadable.Where(line => Concerns([line.Subject], contact, people)).Select(line => line with { Sentence = $"cannot be read: {line.Sentence}" }))
+            .Concat(unreadable.Where(line => Concerns(Attribution.ByFolder([line.Subject], configuration.People), contact, people)).Select(line => line with { Sentence = $"cannot be read: {line.Sentence}" }))
             .OrderBy(line => line.Subject, StringComparer.Ordinal)
             .ToList();
     }
 
     /// <summary>Files of nobody concern every contact of a group; files of somebody only those who are told about that person.</summary>
-    private bool Concerns(IEnumerable<string> paths, Contact contact, HashSet<string> people)
-    {
-        var claims = Attribution.Claims(paths, configuration.People);
-        return claims.Count == 0 ? contact.People.Count == 0 : claims.Any(people.Contains);
-    }
+    private static bool Concerns(IReadOnlyList<string> claims, Contact contact, HashSet<string> people) =>
+        claims.Count == 0 ? contact.People.Count == 0 : claims.Any(people.Contains);
+
+    private IReadOnlyList<string> Claims(IReadOnlyList<Sighting> sightings) =>
+        Attribution.Claims(null, [.. sightings.Select(sighting => new SeenName(sighting.Inbox, sighting.Path))], configuration);
 
     private bool IsRecent(IReadOnlyList<Sighting> sightings) =>
         sightings.Any(sighting => sighting.FirstSeen >= now - Duration.FromDays(RefusedDays));

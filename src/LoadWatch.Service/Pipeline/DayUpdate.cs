@@ -1,10 +1,14 @@
+using LoadWatch.Activities;
 using LoadWatch.Days;
 using LoadWatch.Findings;
+using LoadWatch.Loads;
 using LoadWatch.Notices;
 using LoadWatch.People;
+using LoadWatch.Plans;
+using LoadWatch.Rows;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
-using LoadWatch.Storage.Activities;
+using LoadWatch.Storage.Rows;
 using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
@@ -17,6 +21,9 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
 
     private const int PeopleInOneCommit = 50;
 
+    private TableBasis basis = null!;
+    private IReadOnlyDictionary<string, PersonPlan> plans = null!;
+
     /// <summary>Dates through which people are computed, by person, where it is not the last date that is over for them.</summary>
     public IReadOnlyDictionary<string, LocalDate> Through { get; init; } = new Dictionary<string, LocalDate>();
 
@@ -24,6 +31,8 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
     {
         var behind = store.Read(session =>
         {
+            basis = TableBasis.Of(configuration, session);
+            plans = new PersonPlans(configuration).Of(session);
             var dirty = session.People.Dirty().ToDictionary(item => item.Person, item => item.From, StringComparer.Ordinal);
             return configuration.People.Values
                 .OrderBy(person => person.Id, StringComparer.Ordinal)
@@ -58,31 +67,61 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
     {
         var group = configuration.Groups[person.Group];
         var through = ThroughOf(person);
-        var activities = store.Read(session => session.Activities.OfPerson(person.Id)).Select(activity => OnDay(activity, group)).ToList();
-        var days = LoadCalendar.Build(person.Id, activities, through);
-        var findings = RuleBook.Evaluate(new RuleSubject(person, days, group.Limits) { LoadUnit = LoadUnits.Of(group.LoadQuantity), LoadQuantity = group.LoadQuantity });
+        var (training, tests) = store.Read(session => (
+            PersonTraining.Of(session, configuration, basis, person),
+            session.TableRows.OfPerson(person.Id, RowKind.Tests).Select(row => new DatedTest(row.Date, (TestRow)row.Content)).ToList()));
+        var activities = training.Activities.Where(activity => activity.Date <= through).ToList();
+        var plan = plans[person.Id];
+        var counted = Counted(person, group.LoadQuantity, group.LoadFallbacks, activities);
+        var days = LoadCalendar.Build(person.Id, counted, through, plan);
+        var findings = RuleBook.Evaluate(new RuleSubject(person, days, group.Limits)
+        {
+            LoadUnit = LoadUnits.Of(group.LoadQuantity),
+            LoadQuantity = group.LoadQuantity,
+            SessionLoads = counted.ToDictionary(activity => activity.Key, activity => activity.Load, StringComparer.Ordinal),
+            Activities = activities,
+            Plan = plan,
+            Tests = tests.FindAll(test => test.Date <= through),
+        });
         return new ComputedSeries(
             person.Id,
             from,
             through,
             days.Where(day => day.Date >= from).ToList(),
-            findings.Where(finding => finding.Date >= from).ToList());
+            findings.Where(finding => finding.Date >= from).ToList(),
+            Questions(person, training).Where(question => question.Date >= from).ToList());
     }
 
-    private static ActivityOnDay OnDay(StoredActivity activity, Group group) => new(
-        activity.Winner.Key,
-        activity.Winner.Date,
-        [activity.Winner.Source],
-        activity.Values.Quantities.FirstOrDefault(quantity => quantity.Name == group.LoadQuantity)?.Value,
-        activity.Values.Stimulus);
+    /// <summary>Each session with the load that counts for its day.</summary>
+    private static List<ActivityOnDay> Counted(Person person, string quantity, IReadOnlyList<string> fallbacks, List<JoinedActivity> activities)
+    {
+        var order = new LoadOrder(quantity, fallbacks, activities.ConvertAll(Loads), person.HeartRateIsValidOn);
+        return activities.ConvertAll(activity => OnDay(activity, order));
+    }
+
+    private static SessionLoads Loads(JoinedActivity activity) => new(activity.Date, activity.Quantities);
+
+    private static ActivityOnDay OnDay(JoinedActivity activity, LoadOrder order) => new(
+        activity.Key, activity.Date, activity.Sources, order.Choose(Loads(activity))?.Value, activity.Stimulus, activity.AddsLoad);
+
+    /// <summary>An exercise of a set log that has no body region is asked about with the date of the last session.</summary>
+    private static IEnumerable<Question> Questions(Person person, JoinResult training)
+    {
+        var last = training.Activities.Count == 0 ? (LocalDate?)null : training.Activities[^1].Date;
+        return training.Questions.Select(question => new Question(person.Id, question.Date, question.Sentence))
+            .Concat(last is { } date
+                ? training.UnknownExercises.Select(word => new Question(person.Id, date, $"exercise \"{word}\": which body regions? A line under computation, exercises tells"))
+                : []);
+    }
 
     private sealed record ComputedSeries(
-        string Person, LocalDate From, LocalDate Through, IReadOnlyList<Day> Days, IReadOnlyList<Finding> Findings)
+        string Person, LocalDate From, LocalDate Through, IReadOnlyList<Day> Days, IReadOnlyList<Finding> Findings, IReadOnlyList<Question> Questions)
     {
         public void Write(StoreSession session)
         {
             session.Days.Replace(Person, From, Days);
             session.Findings.Replace(Person, From, Findings);
+            session.Questions.Replace(Person, From, Questions);
             session.People.Computed(Person, Through);
         }
     }

@@ -1,11 +1,23 @@
 using LoadWatch.Activities;
 using LoadWatch.Recordings;
+using LoadWatch.Rows;
+using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
 
 /// <summary>An arrival decoded, judged and computed, ready for its one commit.</summary>
-/// <param name="Kind"><c>fit</c>, <c>csv</c>, <c>gzip</c>, <c>zip</c> or <c>unknown</c>.</param>
+/// <param name="Kind"><c>fit</c>, <c>csv</c>, <c>table</c>, <c>gzip</c>, <c>zip</c> or <c>unknown</c>.</param>
 /// <param name="Recordings">Where stored: its recordings with everything computed from them; else empty.</param>
-public sealed record DecodedArrival(string Sha, string Kind, ArrivalVerdict Verdict, IReadOnlyList<ComputedRecording> Recordings);
+public sealed record DecodedArrival(string Sha, string Kind, ArrivalVerdict Verdict, IReadOnlyList<ComputedRecording> Recordings)
+{
+    /// <summary>Where stored and a table: what it holds. Its rows are taken up once everything of the group is settled (<see cref="Tables"/>).</summary>
+    public DecodedTable? Table { get; init; }
+
+    /// <summary>What staff would have to say so that all of it counts.</summary>
+    public IReadOnlyList<string> Questions { get; init; } = [];
+
+    /// <summary>The first date (UTC) that questions are about; null without any.</summary>
+    public LocalDate? From { get; init; }
+}
 
 public sealed record ComputedRecording(RecordingSummary Summary, ActivityValues Values);

@@ -7,7 +7,7 @@ using NodaTime;
 namespace LoadWatch.Service.Pipeline;
 
 /// <summary>Judges alerts at the evaluation date and decides notices, in one transaction (I-7, I-14).</summary>
-public sealed class Evaluation(WorkingConfiguration configuration, Briefs briefs, Instant now, SweepReport report)
+public sealed class Evaluation(WorkingConfiguration configuration, Answers answers, Briefs briefs, Instant now, SweepReport report)
 {
     public void Run(StoreSession session)
     {
@@ -16,6 +16,8 @@ public sealed class Evaluation(WorkingConfiguration configuration, Briefs briefs
             Judge(session, person);
         }
 
+        // Again after the first time before days were computed: what is seen or shelved may stand since this very evaluation.
+        report.Take(answers.TakeUp(session));
         report.NoticesDecided += briefs.Decide(session);
     }
 

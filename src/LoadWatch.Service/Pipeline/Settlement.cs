@@ -18,7 +18,7 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
     public void Settle(IReadOnlyList<SeenContent> seen, bool force, IReadOnlyList<Sighting> gone, Action<StoreSession> alongside)
     {
         var pending = store.Read(session => Pending(session, seen, force, gone));
-        var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims)).ToList();
+        var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims, item.IsDecided)).ToList();
         var before = pending.ToDictionary(item => item.Content.Sha, item => item.Before, StringComparer.Ordinal);
         KillPoint.Pass("decoded");
         store.Write(session =>
@@ -42,7 +42,7 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
     }
 
     /// <summary>Contents that are new, or whose owner is told differently now, each once.</summary>
-    private List<(ArrivalContent Content, IReadOnlyList<string> Claims, ArrivalState? Before)> Pending(
+    private List<(ArrivalContent Content, IReadOnlyList<string> Claims, bool IsDecided, ArrivalState? Before)> Pending(
         StoreSession session, IReadOnlyList<SeenContent> seen, bool force, IReadOnlyList<Sighting> gone)
     {
         var decided = session.Decisions.Assigned();
@@ -51,12 +51,13 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
             .Select(same =>
             {
                 // A content read back from the archive was seen under the names on record; one seen now has its name besides.
-                var paths = session.Sightings.Of(same.Key).Except(gone).Select(sighting => sighting.Path)
-                    .Concat(same.Where(item => item.Origin is not null).Select(item => item.Content.Path));
-                return (same.First().Content, Claims: Attribution.Claims(decided.GetValueOrDefault(same.Key)?.Person, paths, configuration.People), Arrival: session.Arrivals.Get(same.Key));
+                var names = session.Sightings.Of(same.Key).Except(gone).Select(sighting => new SeenName(sighting.Inbox, sighting.Path))
+                    .Concat(same.Where(item => item.Origin is not null).Select(item => new SeenName(item.Origin!.Inbox, item.Content.Path)))
+                    .ToList();
+                return (same.First().Content, Claims: Attribution.Claims(decided.GetValueOrDefault(same.Key)?.Person, names, configuration), Arrival: session.Arrivals.Get(same.Key));
             })
             .Where(item => force || IsPending(item.Arrival, item.Content, item.Claims))
-            .Select(item => (item.Content, item.Claims, item.Arrival?.State))
+            .Select(item => (item.Content, item.Claims, decided.ContainsKey(item.Content.Sha), item.Arrival?.State))
             .ToList();
     }
 
@@ -65,7 +66,9 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
         // An archive file refused inside another one, now seen by itself.
         ArrivalState.Refused => arrival.ParentSha is not null && content.ParentSha is null && content.Kind is ContentKind.Gzip or ContentKind.Zip,
         null or ArrivalState.Waiting => true,
-        ArrivalState.Stored => claims.Count != 1 || claims[0] != arrival.Person,
+
+        // Without a claim its device told whose it is, and still does: another roster or device list computes everything anew.
+        ArrivalState.Stored => claims.Count > 1 || (claims.Count == 1 && claims[0] != arrival.Person),
         ArrivalState.Held => true,
         _ => false,
     };

@@ -20,7 +20,11 @@ public sealed class Sweep
     private readonly Intake intake;
     private readonly Recovery recovery;
     private readonly MovedFiles moved;
+    private readonly Answers answers;
     private readonly AssignedFiles assigned;
+    private readonly Tables tables;
+    private readonly Recomputations recomputations;
+    private readonly ArrivalDecoder decoder;
     private readonly Briefs briefs;
     private readonly ArchiveReader reader;
 
@@ -31,13 +35,16 @@ public sealed class Sweep
         this.now = now;
         archive = new Archive(folder);
         var decoders = new DecoderSet(configuration.Layouts);
-        var decoder = new ArrivalDecoder(configuration, decoders, archive, now);
+        decoder = new ArrivalDecoder(configuration, decoders, archive, now);
         reader = new ArchiveReader(store, archive, decoders);
         settlement = new Settlement(configuration, store, decoder, Report);
         intake = new Intake(configuration, store, archive, decoders, settlement, now, Report);
         recovery = new Recovery(store, archive, reader, settlement, probe);
         moved = new MovedFiles(configuration, store, archive, reader, settlement, now);
+        answers = new Answers(configuration, store, now);
         assigned = new AssignedFiles(configuration, store, archive, reader, settlement, Report);
+        tables = new Tables(configuration, store, decoder, Report);
+        recomputations = new Recomputations(store, archive, reader, settlement);
         briefs = new Briefs(configuration, now, Report.Unreadable);
     }
 
@@ -51,11 +58,14 @@ public sealed class Sweep
     public SweepReport Run(CancellationToken cancel = default)
     {
         AdoptConfiguration(cancel);
+        decoder.Basis = store.Read(session => TableBasis.Of(configuration, session));
         recovery.Run(cancel);
         Inboxes.MakePersonFolders(configuration);
         InboxRemoval.PutBack(configuration);
         intake.TakeIn(Inboxes.Changed(configuration, store, Report), cancel);
         moved.TakeUp();
+        TakeUpTables(cancel);
+        Report.Take(answers.TakeUp());
         assigned.TakeUp(cancel);
         Evaluate(cancel);
         Report.InAll = store.Read(session => session.Arrivals.CountByState());
@@ -79,6 +89,7 @@ public sealed class Sweep
             settlement.Settle(piece, force: true);
         }
 
+        TakeUpTables(cancel);
         new DayUpdate(configuration, store, now, Report) { Through = through }.Run(cancel);
         store.Write(session => session.Derived.SetConfigHash(Basis));
         return Report;
@@ -94,6 +105,14 @@ public sealed class Sweep
         session.Derived.Empty();
         session.Derived.SetConfigHash("");
         return through;
+    }
+
+    /// <summary>Rows first, then the recordings that they bear on.</summary>
+    private void TakeUpTables(CancellationToken cancel)
+    {
+        tables.TakeUp(cancel);
+        decoder.Basis = store.Read(session => TableBasis.Of(configuration, session));
+        recomputations.Run(cancel);
     }
 
     private IEnumerable<SeenContent> Kept(string objectSha, Action whenDone)
@@ -141,7 +160,7 @@ public sealed class Sweep
         }
 
         new DayUpdate(configuration, store, now, Report).Run(cancel);
-        store.Write(new Evaluation(configuration, briefs, now, Report).Run);
+        store.Write(new Evaluation(configuration, answers, briefs, now, Report).Run);
         KillPoint.Pass("evaluated");
         new Deliveries(store, Deliveries.Channels(configuration), Report).Run(now);
         new Pages(configuration, store, briefs, Report).Rewrite(now, all: !PagesAreCurrent || Report.HasNews);

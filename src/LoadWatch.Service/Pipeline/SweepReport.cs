@@ -33,6 +33,12 @@ public sealed class SweepReport
     /// <summary>Alerts raised, risen or returned.</summary>
     public int AlertChanges { get; set; }
 
+    /// <summary>Decisions made or withdrawn by tables of answers.</summary>
+    public int AnswersTaken { get; private set; }
+
+    /// <summary>Rows of answers that nobody can follow, by table and date, with the reason.</summary>
+    public IReadOnlyList<BriefLine> OpenAnswers { get; private set; } = [];
+
     /// <summary>Notices decided by this sweep.</summary>
     public int NoticesDecided { get; set; }
 
@@ -49,9 +55,15 @@ public sealed class SweepReport
     public List<string> Pages { get; } = [];
 
     /// <summary>Whether anything happened that a page could show.</summary>
-    public bool HasNews => Settled.Count + PeopleComputed + AlertChanges + NoticesDecided + Undelivered.Count + GivenUp.Count + Unreadable.Count > 0;
+    public bool HasNews => Settled.Count + PeopleComputed + AlertChanges + AnswersTaken + NoticesDecided + Undelivered.Count + GivenUp.Count + Unreadable.Count > 0;
 
     public int CountOf(ArrivalState state) => Settled.GetValueOrDefault(state);
+
+    public void Take(AnswersReport answers)
+    {
+        AnswersTaken += answers.Made + answers.Withdrawn;
+        OpenAnswers = answers.Questions;
+    }
 
     public void Count(ArrivalState state) => Settled[state] = CountOf(state) + 1;
 }

@@ -9,12 +9,13 @@ namespace LoadWatch.Storage.Alerts;
 /// <summary>Tables <c>alert</c> and <c>alert_change</c>: where each alert stands, and every step of how it came there.</summary>
 public sealed class AlertTable
 {
-    private const string Columns = "id, person, rule, about, raised, judged, state, severity, text";
+    private const string Columns = "id, person, rule, about, raised, judged, state, severity, text, shelved_until";
 
     private const string Upsert = $"""
         INSERT INTO alert ({Columns})
-        VALUES (@Id, @Person, @Rule, @About, @Raised, @Judged, @State, @Severity, @Text)
-        ON CONFLICT (id) DO UPDATE SET judged = excluded.judged, state = excluded.state, severity = excluded.severity, text = excluded.text
+        VALUES (@Id, @Person, @Rule, @About, @Raised, @Judged, @State, @Severity, @Text, @ShelvedUntil)
+        ON CONFLICT (id) DO UPDATE SET
+            judged = excluded.judged, state = excluded.state, severity = excluded.severity, text = excluded.text, shelved_until = excluded.shelved_until
         """;
 
     private const string SelectOpen = $"SELECT {Columns} FROM alert WHERE person = @person AND state <> 'normal' ORDER BY id";
@@ -66,6 +67,8 @@ public sealed class AlertTable
 
         public string Text { get; init; } = "";
 
+        public LocalDate? ShelvedUntil { get; init; }
+
         public static Row From(Alert alert) => new()
         {
             Id = alert.Id,
@@ -77,6 +80,7 @@ public sealed class AlertTable
             State = Words<AlertState>.Of(alert.State),
             Severity = Words<Severity>.Of(alert.Severity),
             Text = alert.Text,
+            ShelvedUntil = alert.ShelvedUntil,
         };
 
         public Alert ToAlert() => new(
@@ -85,6 +89,9 @@ public sealed class AlertTable
             Judged,
             Words<AlertState>.Parse(State),
             Words<Severity>.Parse(Severity),
-            Text);
+            Text)
+        {
+            ShelvedUntil = ShelvedUntil,
+        };
     }
 }

@@ -21,6 +21,11 @@ public sealed class DerivedRows
         "DELETE FROM activity",
         "DELETE FROM recording",
         "DELETE FROM table_row",
+        "DELETE FROM table_version",
+        "DELETE FROM table_content",
+        "DELETE FROM question",
+        "DELETE FROM content_question",
+        "DELETE FROM recomputation",
         "DELETE FROM derived_state",
     ];
 

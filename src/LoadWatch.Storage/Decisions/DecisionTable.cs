@@ -3,41 +3,80 @@ using NodaTime;
 
 namespace LoadWatch.Storage.Decisions;
 
-/// <summary>Table <c>decision</c>: appended to, never changed. Of several about one subject the latest is in force.</summary>
+/// <summary>
+/// Table <c>decision</c>: appended to, never changed. Of several about one subject the latest is in force; one that was withdrawn never is.
+/// </summary>
 public sealed class DecisionTable
 {
     private const string Columns = "id, made, kind, person, alert, detail";
     private const string Insert = $"INSERT INTO decision ({Columns}) VALUES (@Id, @Made, @Kind, @Person, @Alert, @Detail)";
     private const string SelectAll = $"SELECT {Columns} FROM decision";
-    private const string SelectOfAlert = $"SELECT {Columns} FROM decision WHERE alert = @alertId";
-    private const string SelectAssigned = $"SELECT {Columns} FROM decision WHERE kind = 'assign'";
+    private const string SelectOfAlert = $"SELECT {Columns} FROM decision WHERE alert = @alertId OR kind = 'withdraw'";
+    private const string SelectOfPerson = $"SELECT {Columns} FROM decision WHERE person = @person";
+    private const string SelectAssigned = $"SELECT {Columns} FROM decision WHERE kind IN ('assign', 'withdraw')";
 
     private readonly StoreSession session;
 
     internal DecisionTable(StoreSession session) => this.session = session;
 
-    /// <summary>Appends a decision; an error when there is one of the same kind and subject at the very same moment.</summary>
+    /// <summary>Appends a decision; an error when there is one of the same kind, subject and row at the very same moment.</summary>
     public void Add(Decision decision) => session.Execute(Insert, Row.From(decision));
 
-    /// <summary>Every decision in the order of their moments.</summary>
+    /// <summary>Every decision in the order of their moments; of one moment in the order of their first dates.</summary>
     public IReadOnlyList<Decision> All() => Select(SelectAll);
 
-    /// <summary>Decisions about an alert in the order of their moments.</summary>
-    public IReadOnlyList<Decision> OfAlert(string alertId) => Select(SelectOfAlert, new { alertId });
+    /// <summary>All that are in force by themselves, neither withdrawn nor a withdrawal; sorted as above.</summary>
+    public IReadOnlyList<Decision> InForce() => InForce(Select(SelectAll));
 
-    /// <summary>Decisions about an arrival in the order of their moments: the last one names its owner.</summary>
-    public IReadOnlyList<Decision> OfArrival(string sha) => Select(SelectAssigned).FindAll(decision => decision.Subject == sha);
+    /// <summary>Those of a person in force; sorted as above.</summary>
+    public IReadOnlyList<Decision> InForce(string person) => InForce(OfPerson(person));
+
+    /// <summary>Every decision about a person's alerts, dates and arrivals, withdrawals too; sorted as above.</summary>
+    public IReadOnlyList<Decision> OfPerson(string person) => Select(SelectOfPerson, new { person });
+
+    /// <summary>Decisions about an alert, withdrawals too; sorted as above.</summary>
+    public IReadOnlyList<Decision> OfAlert(string alertId) =>
+        About(Select(SelectOfAlert, new { alertId }), decision => decision.Kind is DecisionKind.Acknowledge or DecisionKind.Shelve);
+
+    /// <summary>Decisions about an arrival, withdrawals too, in the order of their moments: the last one in force names its owner.</summary>
+    public IReadOnlyList<Decision> OfArrival(string sha) =>
+        About(Select(SelectAssigned), decision => decision.Kind == DecisionKind.Assign && decision.Subject == sha);
 
     /// <summary>The decision in force for each arrival that has one, by SHA-256.</summary>
-    public IReadOnlyDictionary<string, Decision> Assigned() => Select(SelectAssigned)
+    public IReadOnlyDictionary<string, Decision> Assigned() => InForce(Select(SelectAssigned))
         .GroupBy(decision => decision.Subject, StringComparer.Ordinal)
         .ToDictionary(same => same.Key, same => same.Last(), StringComparer.Ordinal);
+
+    /// <summary>The arrivals whose every assignment was withdrawn, by SHA-256, with the last of them.</summary>
+    public IReadOnlyDictionary<string, Decision> AssignedNoMore()
+    {
+        var all = Select(SelectAssigned);
+        var held = InForce(all).Select(decision => decision.Subject).ToHashSet(StringComparer.Ordinal);
+        return all.Where(decision => decision.Kind == DecisionKind.Assign && !held.Contains(decision.Subject))
+            .GroupBy(decision => decision.Subject, StringComparer.Ordinal)
+            .ToDictionary(same => same.Key, same => same.Last(), StringComparer.Ordinal);
+    }
+
+    /// <summary>Those neither withdrawn nor a withdrawal, of decisions with their withdrawals.</summary>
+    public static IReadOnlyList<Decision> InForce(IReadOnlyList<Decision> decisions)
+    {
+        var withdrawn = decisions.Where(decision => decision.Kind == DecisionKind.Withdraw).Select(decision => decision.Subject).ToHashSet(StringComparer.Ordinal);
+        return [.. decisions.Where(decision => decision.Kind != DecisionKind.Withdraw && !withdrawn.Contains(decision.Id))];
+    }
+
+    private static List<Decision> About(List<Decision> decisions, Func<Decision, bool> isMeant)
+    {
+        var own = decisions.Where(isMeant).Select(decision => decision.Id).ToHashSet(StringComparer.Ordinal);
+        return decisions.FindAll(decision => own.Contains(decision.Kind == DecisionKind.Withdraw ? decision.Subject : decision.Id));
+    }
 
     private List<Decision> Select(string sql, object? values = null) =>
     [
         .. session.Rows<Row>(sql, values)
             .Select(row => row.ToDecision())
             .OrderBy(decision => decision.Made)
+            .ThenBy(decision => decision.From ?? LocalDate.MinIsoValue)
+            .ThenBy(decision => decision.Kind)
             .ThenBy(decision => decision.Id, StringComparer.Ordinal),
     ];
 
@@ -57,25 +96,44 @@ public sealed class DecisionTable
 
         public static Row From(Decision decision)
         {
-            var isOfAlert = decision.Kind == DecisionKind.Acknowledge;
+            var detail = new DetailText(
+                decision.Kind == DecisionKind.Assign ? decision.Subject : null,
+                decision.By,
+                decision.Note,
+                decision.Kind == DecisionKind.Withdraw ? decision.Subject : null,
+                decision.From,
+                decision.Until,
+                decision.Via);
             return new Row
             {
                 Id = decision.Id,
                 Made = decision.Made,
                 Kind = Words<DecisionKind>.Of(decision.Kind),
                 Person = decision.Person,
-                Alert = isOfAlert ? decision.Subject : null,
-                Detail = JsonText.Write(new DetailText(isOfAlert ? null : decision.Subject, decision.By, decision.Note)),
+                Alert = decision.Kind is DecisionKind.Acknowledge or DecisionKind.Shelve ? decision.Subject : null,
+                Detail = JsonText.Write(detail),
             };
         }
 
         public Decision ToDecision()
         {
+            var kind = Words<DecisionKind>.Parse(Kind);
             var detail = JsonText.Read<DetailText>(Detail);
-            var subject = Alert ?? detail.Arrival ?? throw new InvalidDataException($"decision {Id} is about nothing");
-            return new Decision(Words<DecisionKind>.Parse(Kind), subject, Person, Made, detail.By, detail.Note);
+            var subject = kind switch
+            {
+                DecisionKind.Acknowledge or DecisionKind.Shelve => Alert,
+                DecisionKind.Assign => detail.Arrival,
+                DecisionKind.Withdraw => detail.Decision,
+                _ => Person,
+            };
+            return new Decision(kind, subject ?? throw new InvalidDataException($"decision {Id} is about nothing"), Person, Made, detail.By, detail.Note)
+            {
+                From = detail.From,
+                Until = detail.Until,
+                Via = detail.Via,
+            };
         }
     }
 
-    private sealed record DetailText(string? Arrival, string? By, string? Note);
+    private sealed record DetailText(string? Arrival, string? By, string? Note, string? Decision, LocalDate? From, LocalDate? Until, string? Via);
 }

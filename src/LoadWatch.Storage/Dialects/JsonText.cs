@@ -2,6 +2,8 @@ using System.Text.Encodings.Web;
 using System.Text.Json;
 using System.Text.Json.Serialization;
 using System.Text.Unicode;
+using NodaTime;
+using NodaTime.Text;
 
 namespace LoadWatch.Storage.Dialects;
 
@@ -12,7 +14,12 @@ internal static class JsonText
     {
         PropertyNamingPolicy = JsonNamingPolicy.SnakeCaseLower,
         Encoder = JavaScriptEncoder.Create(UnicodeRanges.All),
-        Converters = { new JsonStringEnumConverter(JsonNamingPolicy.SnakeCaseLower, allowIntegerValues: false) },
+        Converters =
+        {
+            new JsonStringEnumConverter(JsonNamingPolicy.SnakeCaseLower, allowIntegerValues: false),
+            new JsonDates<LocalDate>(LocalDatePattern.Iso),
+            new JsonDates<LocalTime>(LocalTimePattern.ExtendedIso),
+        },
     };
 
     public static string Write<T>(T value) => JsonSerializer.Serialize(value, Options);

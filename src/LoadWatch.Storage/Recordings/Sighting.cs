@@ -8,4 +8,5 @@ namespace LoadWatch.Storage.Recordings;
 /// <param name="Path">Within the inbox; a member of an archive file is <c>outer.zip!/inner.fit</c>, with the stamp of the outer file.</param>
 /// <param name="FirstSeen">When this content was first seen under this name.</param>
 /// <param name="Latest">Whether this is the newest content of the name.</param>
-public sealed record Sighting(string Inbox, string Path, string Sha, Instant FirstSeen, FileStamp Stamp, bool Latest);
+/// <param name="Since">Since when it is, or when it last became it.</param>
+public sealed record Sighting(string Inbox, string Path, string Sha, Instant FirstSeen, FileStamp Stamp, bool Latest, Instant Since);

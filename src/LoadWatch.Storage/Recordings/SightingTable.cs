@@ -6,14 +6,16 @@ namespace LoadWatch.Storage.Recordings;
 /// <summary>Table <c>sighting</c>: under which names each content was seen; its latest rows are the cache that spares hashing.</summary>
 public sealed class SightingTable
 {
-    private const string Columns = "inbox, path, sha, first_seen, size, mtime, file_id, latest";
+    private const string Columns = "inbox, path, sha, first_seen, size, mtime, file_id, latest, since";
 
     private const string Outdate = "UPDATE sighting SET latest = 0 WHERE inbox = @inbox AND path = @path AND sha <> @sha AND latest = 1";
 
     private const string Insert = $"""
         INSERT INTO sighting ({Columns})
-        VALUES (@inbox, @path, @sha, @firstSeen, @Size, @ModifiedUnixMs, @FileId, 1)
-        ON CONFLICT (inbox, path, sha) DO UPDATE SET size = excluded.size, mtime = excluded.mtime, file_id = excluded.file_id, latest = 1
+        VALUES (@inbox, @path, @sha, @firstSeen, @Size, @ModifiedUnixMs, @FileId, 1, @firstSeen)
+        ON CONFLICT (inbox, path, sha) DO UPDATE SET
+            size = excluded.size, mtime = excluded.mtime, file_id = excluded.file_id,
+            since = CASE WHEN sighting.latest = 1 THEN sighting.since ELSE excluded.since END, latest = 1
         """;
 
     private const string Delete = "DELETE FROM sighting WHERE inbox = @Inbox AND path = @Path AND sha = @Sha";
@@ -28,7 +30,7 @@ public sealed class SightingTable
     public IReadOnlyDictionary<string, Sighting> Latest(string inbox) =>
         session.Rows<Row>(SelectLatest, new { inbox }).ToDictionary(row => row.Path, row => row.ToSighting(), StringComparer.Ordinal);
 
-    /// <summary>Notes that a name holds a content now. The first moment of the pair stays; the stamp is the new one.</summary>
+    /// <summary>Notes that a name holds a content now. The first moment of the pair stays; the stamp is the new one. A content that comes back counts anew from now on.</summary>
     public void Upsert(string inbox, string path, string sha, Instant firstSeen, FileStamp stamp)
     {
         session.Execute(Outdate, new { inbox, path, sha });
@@ -65,6 +67,8 @@ public sealed class SightingTable
 
         public long Latest { get; init; }
 
-        public Sighting ToSighting() => new(Inbox, Path, Sha, FirstSeen, new FileStamp(Size, Mtime, FileId), Latest == 1);
+        public Instant Since { get; init; }
+
+        public Sighting ToSighting() => new(Inbox, Path, Sha, FirstSeen, new FileStamp(Size, Mtime, FileId), Latest == 1, Since);
     }
 }

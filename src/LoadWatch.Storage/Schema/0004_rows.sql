@@ -12,6 +12,42 @@ CREATE TABLE table_row (
     PRIMARY KEY (scope, kind, subject, key)
 )
 ;
+CREATE TABLE table_content (
+    sha TEXT NOT NULL PRIMARY KEY REFERENCES arrival (sha),
+    layout TEXT NOT NULL,
+    named_by_folder BIGINT NOT NULL
+)
+;
+CREATE TABLE table_version (
+    scope TEXT NOT NULL,
+    path TEXT NOT NULL,
+    sha TEXT NOT NULL,
+    since TEXT NOT NULL,
+    owner TEXT,
+    PRIMARY KEY (scope, path, sha)
+)
+;
+CREATE TABLE question (
+    person TEXT NOT NULL,
+    date TEXT NOT NULL,
+    sentence TEXT NOT NULL,
+    PRIMARY KEY (person, date, sentence)
+)
+;
+CREATE TABLE content_question (
+    sha TEXT NOT NULL REFERENCES arrival (sha),
+    date TEXT NOT NULL,
+    sentence TEXT NOT NULL,
+    PRIMARY KEY (sha, sentence)
+)
+;
+CREATE TABLE recomputation (
+    person TEXT NOT NULL,
+    from_date TEXT NOT NULL,
+    to_date TEXT NOT NULL,
+    PRIMARY KEY (person, from_date, to_date)
+)
+;
 CREATE INDEX table_row_person ON table_row (person, kind, date)
 ;
 CREATE INDEX table_row_kind ON table_row (kind, date)
@@ -25,3 +61,5 @@ ALTER TABLE day ADD COLUMN plan TEXT NOT NULL DEFAULT '{}'
 ALTER TABLE finding RENAME COLUMN region TO about
 ;
 ALTER TABLE alert RENAME COLUMN region TO about
+;
+ALTER TABLE alert ADD COLUMN shelved_until TEXT

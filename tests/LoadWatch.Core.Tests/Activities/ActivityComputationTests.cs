@@ -24,10 +24,10 @@ public class ActivityComputationTests
         var values = Compute(recording);
 
         Assert.Equal(
-            [("banister_trimp", "AU"), ("distance", "m"), ("edwards_load", "AU"), ("minutes", "min"), ("stagno_load", "AU"), ("work", "kJ")],
+            [("banister_trimp", "AU"), ("distance", "m"), ("edwards_load", "AU"), ("minutes", "min"), ("power_top", "W"), ("stagno_load", "AU"), ("work", "kJ")],
             values.Quantities.Select(quantity => (quantity.Name, quantity.Unit)));
         Assert.Equal(108.0954, values.Quantities[0].Value, 1e-4);
-        Assert.Equal([30_600.0, 180, 60, 102.6, 720], values.Quantities.Skip(1).Select(quantity => quantity.Value));
+        Assert.Equal([30_600.0, 180, 60, 200, 102.6, 720], values.Quantities.Skip(1).Select(quantity => quantity.Value));
         Assert.DoesNotContain(values.Quantities, quantity => quantity.Estimated);
         Assert.Equal((150.0, 150, 200.0, 200.0), (values.HeartRateMeanBpm, values.HeartRateMaxBpm, values.PowerMeanWatts, values.PowerMaxWatts));
         Assert.Equal([Channel.HeartRate, Channel.Power], values.TimesInZone.Select(zone => zone.Channel));

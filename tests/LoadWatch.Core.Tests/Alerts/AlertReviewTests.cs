@@ -119,6 +119,61 @@ public class AlertReviewTests
         Assert.Empty(AlertReview.Acknowledge(result.Alerts[0], On(7), _ => 4).Changes);
     }
 
+    [Theory]
+    [InlineData(AlertState.Unacknowledged)]
+    [InlineData(AlertState.Acknowledged)]
+    public void ShelvingKeepsTheState(AlertState state)
+    {
+        var result = AlertReview.Shelve(Alert(state), On(9), On(7), _ => 3);
+
+        AssertChange(result, 4, state, state, AlertChangeReason.Shelved);
+        Assert.Equal(Alert(state) with { ShelvedUntil = On(9) }, result.Alerts[0]);
+        Assert.Empty(AlertReview.Shelve(result.Alerts[0], On(9), On(7), _ => 4).Changes);
+        AssertChange(AlertReview.Shelve(result.Alerts[0], On(11), On(8), _ => 4), 5, state, state, AlertChangeReason.Shelved);
+        AssertChange(AlertReview.Unshelve(result.Alerts[0], On(8), _ => 4), 5, state, state, AlertChangeReason.Unshelved);
+    }
+
+    [Theory]
+    [InlineData(AlertState.Normal)]
+    [InlineData(AlertState.Returned)]
+    public void WhatDoesNotStandIsNotShelved(AlertState state) => Assert.Empty(AlertReview.Shelve(Alert(state), On(9), On(7), _ => 3).Changes);
+
+    /// <summary>The date 8 is evaluated on day 9, still shelved; the date 9 on day 10, the first day after.</summary>
+    [Fact]
+    public void ShelvingEndsByItselfOnTheDayAfterItsLastDate()
+    {
+        var shelved = Alert(AlertState.Acknowledged) with { ShelvedUntil = On(9) };
+
+        var still = Review(8, [shelved], Find(Legs, 8));
+        Assert.Empty(still.Changes);
+        Assert.Equal(On(9), still.Alerts[0].ShelvedUntil);
+        var over = Review(9, [shelved], Find(Legs, 9));
+        AssertChange(over, 4, AlertState.Acknowledged, AlertState.Acknowledged, AlertChangeReason.Unshelved);
+        Assert.Null(over.Alerts[0].ShelvedUntil);
+    }
+
+    [Fact]
+    public void ARiseInSeverityEndsShelvingAtOnceAFallDoesNot()
+    {
+        var shelved = Alert(AlertState.Acknowledged) with { ShelvedUntil = On(20) };
+
+        var risen = Review(6, [shelved], Find(Legs, 6, severity: Severity.Warning));
+        Assert.Equal([(4, AlertChangeReason.SeverityRose), (5, AlertChangeReason.Unshelved)], risen.Changes.Select(change => (change.Sequence, change.Reason)));
+        Assert.Null(risen.Alerts[0].ShelvedUntil);
+        var fallen = Review(6, [shelved with { Severity = Severity.Warning }], Find(Legs, 6));
+        AssertChange(fallen, 4, AlertState.Acknowledged, AlertState.Acknowledged, AlertChangeReason.SeverityFell);
+        Assert.Equal(On(20), fallen.Alerts[0].ShelvedUntil);
+    }
+
+    [Fact]
+    public void AnAlertThatIsOverIsNoLongerShelved()
+    {
+        var result = Review(6, [Alert(AlertState.Unacknowledged) with { ShelvedUntil = On(20) }]);
+
+        AssertChange(result, 4, AlertState.Unacknowledged, AlertState.Returned, AlertChangeReason.ReturnedToNormal);
+        Assert.Null(result.Alerts[0].ShelvedUntil);
+    }
+
     [Fact]
     public void EachKeyHasItsOwnAlert()
     {
@@ -160,11 +215,12 @@ public class AlertReviewTests
         Gen.Enum<Severity>(),
         Gen.Enum<Severity>(),
         Gen.Int[0, 2],
+        Gen.Int[-1, 4],
         Gen.Bool,
-        Gen.Bool).Sample((state, before, now, later, found, held) =>
+        Gen.Bool).Sample((state, before, now, later, shelved, found, held) =>
     {
         Finding[] findings = found ? [Find(Legs, 5 + later, severity: now), Find(Load, 5 + later)] : [];
-        Alert[] current = [Alert(state) with { Severity = before }];
+        Alert[] current = [Alert(state) with { Severity = before, ShelvedUntil = shelved >= 0 && AlertLife.IsActive(state) ? On(5 + shelved) : null }];
         var first = AlertReview.Review("anna", On(5 + later), current, _ => 3, findings, (_, _) => held);
         var second = AlertReview.Review("anna", On(5 + later), first.Alerts, _ => 4, findings, (_, _) => held);
 

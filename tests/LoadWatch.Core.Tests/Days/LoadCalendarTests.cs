@@ -59,6 +59,18 @@ public class LoadCalendarTests
         Assert.Equal(0, day.Coverage7);
     }
 
+    [Theory]
+    [InlineData(null)]
+    [InlineData(30.0)]
+    public void AnActivityWhoseLoadIsCountedElsewhereAddsItsStimulusAlone(double? load)
+    {
+        var day = Build(0, Activity(0, 50), Activity(0, load, key: "b", stimulus: Bouts(3)) with { AddsLoad = false })[0];
+
+        Assert.Equal(50, day.Load);
+        Assert.True(day.Regions[BodyRegion.Legs].HeavyOrFast);
+        Assert.Null(Build(0, Activity(0, load) with { AddsLoad = false })[0].Load);
+    }
+
     [Fact]
     public void TheOrderOfTheActivitiesChangesNothing() => Activities.Sample(activities =>
     {

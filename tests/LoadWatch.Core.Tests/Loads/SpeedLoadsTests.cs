@@ -1,12 +1,11 @@
 using LoadWatch.Activities;
+using LoadWatch.People;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Loads;
 
 public class SpeedLoadsTests
 {
-    private static readonly double[] Bounds = [2, 4, 5.5, 7];
-
     private static readonly SampleSeries Samples = Given.EverySecond((Channel.Speed, Given.Steps((3, 60), (6, 10), (8, 5), (3, 10))));
 
     /// <summary>By hand, in the middles of the bins: 10 x 6.05 + 5 x 8.05 = 100.75 m, of which 40.25 m at 7 m/s or faster.</summary>
@@ -40,6 +39,35 @@ public class SpeedLoadsTests
     public void ASlowRunHasNoMetresAboveNotUnknownOnes() =>
         Assert.Equal([3.0, 0, 0], Of("running", Given.EverySecond((Channel.Speed, Given.Steps((3, 60))))).Select(quantity => quantity.Value));
 
-    private static IEnumerable<Quantity> Of(string sport, SampleSeries samples) =>
-        SpeedLoads.Of(new UsableRecording(Given.Recording(sport, samples), shareWanted: 0.5), Bounds);
+    /// <summary>By hand: 80 and 90 % of 7.5 m/s are 6 and 6.75 m/s; in the middles of the bins 100.75 m and 40.25 m; 8 / 7.5 = 1.0666...</summary>
+    [Fact]
+    public void WithABestSpeedTheSharesJoin() =>
+        Assert.Equal(
+            [
+                new Quantity("speed_top", 8, "m/s", Estimated: false),
+                new Quantity("distance_above_5_5_m_s", 100.75, "m", Estimated: false),
+                new Quantity("distance_above_7_m_s", 40.25, "m", Estimated: false),
+                new Quantity("speed_top_share", 1.06666667, "1", Estimated: false),
+                new Quantity("distance_above_80_percent_speed_max", 100.75, "m", Estimated: false),
+                new Quantity("distance_above_90_percent_speed_max", 40.25, "m", Estimated: false),
+            ],
+            Of("soccer", Samples, Given.Anchor(AnchorKind.SpeedMax, 7.5)));
+
+    [Fact]
+    public void OnWheelsABestSpeedOnFootMeansNothing() => Assert.Empty(Of("cycling", Samples, Given.Anchor(AnchorKind.SpeedMax, 7.5)));
+
+    [Fact]
+    public void TenReadingsASecondCountAccelerationsToo()
+    {
+        var times = Enumerable.Range(0, 31).Select(at => Given.StartMilliseconds + (at * 100L)).ToArray();
+        var samples = new SampleSeries(times, new Dictionary<Channel, double[]> { [Channel.Speed] = [.. Enumerable.Repeat(3.0, 31)] });
+
+        Assert.Equal(
+            [new Quantity("accelerations", 0, "count", Estimated: false), new Quantity("decelerations", 0, "count", Estimated: false)],
+            Of("soccer", samples).TakeLast(2));
+        Assert.Empty(Of("cycling", samples));
+    }
+
+    private static IEnumerable<Quantity> Of(string sport, SampleSeries samples, Anchor? best = null) =>
+        SpeedLoads.Of(new UsableRecording(Given.Recording(sport, samples), shareWanted: 0.5), best, new ComputationSettings());
 }

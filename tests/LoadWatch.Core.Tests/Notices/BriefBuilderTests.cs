@@ -24,6 +24,20 @@ public sealed class BriefBuilderTests
     }
 
     [Fact]
+    public void WhatIsShelvedIsNeitherFlaggedNorCountedAndItsRowSaysUntilWhen()
+    {
+        var shelved = Silence("c") with { Alert = Silence("c").Alert with { ShelvedUntil = new LocalDate(2026, 3, 3) } };
+        var brief = Build(Subject("a", "Ann", LoadRatio("a")), Subject("c", "Cas", shelved));
+
+        Assert.Equal("1 of 2 to look at: 1 well above their usual.", brief.FirstLine);
+        Assert.Equal(["a"], brief.Flagged.Select(person => person.PersonId));
+        var row = brief.Groups[0].Rows.Single(row => row.PersonId == "c");
+        Assert.False(row.Flagged);
+        Assert.StartsWith("shelved until 3 Mar: ", row.Remark, StringComparison.Ordinal);
+        Assert.Equal("", FlaggedList.Of([shelved.Alert]));
+    }
+
+    [Fact]
     public void NothingToActOnIsSaidPlainly()
     {
         Assert.Equal("All quiet: 41 people, nothing to act on.", Build([.. Enumerable.Range(1, 41).Select(n => Subject($"p{n}", $"P {n}"))]).FirstLine);

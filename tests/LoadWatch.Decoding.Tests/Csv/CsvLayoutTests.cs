@@ -35,6 +35,17 @@ public class CsvLayoutTests
         { Good with { Time = Good.Time with { Format = "dd.MM.yyyy hh:mm" } }, "time.format 'dd.MM.yyyy hh:mm' does not hold a full date and time" },
         { Good with { Time = Good.Time with { Format = "" } }, "time.format '' is not a pattern" },
         { Good with { Time = Good.Time with { Format = "QQ" } }, "time.format 'QQ' " },
+        { Good with { Time = DayTime with { Format = "HH:mm:ss dd.MM.yyyy" } }, "time.format 'HH:mm:ss dd.MM.yyyy' is not a pattern of a time of day" },
+        { Good with { Time = DayTime with { Format = "hh:mm:ss" } }, "time.format 'hh:mm:ss' does not hold a time of day" },
+        { Good with { Time = DayTime with { Format = "seconds_from_start" } }, "time.format 'seconds_from_start' " },
+        { Good with { Time = DayTime with { DateFormat = "dd.MM." } }, "time.date_format 'dd.MM.' does not hold a full date" },
+        { Good with { Time = DayTime with { StartColumn = "begin" } }, "time.start_column and time.date_column exclude each other" },
+        { Good with { PersonColumn = "time" }, "column 'time' is used for two things" },
+        { Good with { Quality = new() { AtLeast = 1 } }, "quality.column is missing" },
+        { Good with { Quality = new() { Column = "fix" } }, "quality needs at_least or at_most" },
+        { Good with { Quality = new() { Column = "fix", AtLeast = 2, AtMost = 1 } }, "quality.at_least is above quality.at_most" },
+        { Good with { Quality = new() { Column = "fix", AtLeast = 2, Channels = [] } }, "quality.channels names no channel" },
+        { Good with { Quality = new() { Column = "power_w", AtLeast = 2 } }, "column 'power_w' is used for two things" },
         { Good with { Columns = [] }, "columns names no channel" },
         { Good with { Columns = [Power with { Column = "" }] }, "columns: the column of Power has no name" },
         { Good with { Columns = [Power with { Unit = "bpm" }] }, "columns: unit 'bpm' of 'power_w' is not known for Power" },
@@ -51,6 +62,8 @@ public class CsvLayoutTests
         Time = new CsvTimeColumn { Column = "time" },
         Columns = [Power],
     };
+
+    private static CsvTimeColumn DayTime { get; } = new() { Column = "time", DateColumn = "day" };
 
     [Theory]
     [MemberData(nameof(Unusable))]
@@ -84,6 +97,23 @@ public class CsvLayoutTests
         Assert.Equal(1791180000500, recording.Samples.UnixMilliseconds[0]);
         Assert.Equal((142, 1500), (recording.Samples[Channel.HeartRate][0], recording.Samples[Channel.Distance][0]));
         Assert.Equal("rowing", recording.Sport.Name);
+    }
+
+    [Fact]
+    public void TheKeysOfASquadAreWrittenLikeThis()
+    {
+        const string Json = """
+            { "name": "pods", "header": ["pod"], "person_column": "pod",
+              "time": { "column": "clock", "format": "HH:mm:ss.f", "date_column": "day", "date_format": "dd.MM.yyyy" },
+              "columns": [{ "column": "v", "channel": "speed", "unit": "m/s" }],
+              "quality": { "column": "fix", "at_least": 0.5, "at_most": 1, "channels": ["speed"] } }
+            """;
+        var layout = JsonSerializer.Deserialize<CsvLayout>(Json, Configuration)!;
+
+        Assert.Empty(layout.Validate());
+        var recording = CsvFiles.Only(CsvFiles.Decode("pod,day,clock,v,fix\n7,05.10.2026,06:00:00.5,3,1\n7,,06:00:00.6,4,0.4\n", layout));
+        Assert.Equal(("7", 1791180000500), (recording.Subject, recording.Samples.UnixMilliseconds[0]));
+        Assert.Equal([3, double.NaN], recording.Samples[Channel.Speed].ToArray());
     }
 
     [Fact]

@@ -119,7 +119,7 @@ public sealed class AssignCommandTests : IDisposable
         using var workplace = Workplace.OpenToDecide(folder.ConfigPath);
         using var output = new StringWriter(CultureInfo.InvariantCulture);
         using var errors = new StringWriter(CultureInfo.InvariantCulture);
-        var code = AssignCommand.Run(workplace.Store, file, "anna", new Circumstances(now ?? WorkingFolder.Now, by, note), output, errors);
+        var code = AssignCommand.Run(workplace, file, "anna", new Circumstances(now ?? WorkingFolder.Now, by, note), output, errors);
         return (code, output.ToString(), errors.ToString());
     }
 }

@@ -50,6 +50,14 @@ public sealed class ConfigurationMistakesTests
         "loadwatch.json:1: computation.power_bounds: the bounds must rise, the first from above 0")]
     [InlineData("""{ "computation": { "speed_bounds": [-1, 2] } }""",
         "loadwatch.json:1: computation.speed_bounds: the bounds must rise, the first from above 0")]
+    [InlineData("""{ "computation": { "speed_max_shares": [0.9, 0.9] } }""",
+        "loadwatch.json:1: computation.speed_max_shares: the shares must rise and lie in 0.5 to 1")]
+    [InlineData("""{ "computation": { "speed_max_shares": [0.49, 0.9] } }""",
+        "loadwatch.json:1: computation.speed_max_shares: the shares must rise and lie in 0.5 to 1")]
+    [InlineData("""{ "computation": { "speed_max_shares": [0.9, 1.01] } }""",
+        "loadwatch.json:1: computation.speed_max_shares: the shares must rise and lie in 0.5 to 1")]
+    [InlineData("""{ "groups": [ { "load_fallbacks": ["minutes", "banister_trimp"] } ] }""",
+        """loadwatch.json:1: groups[0].load_fallbacks: "banister_trimp" is the group's load itself""")]
     [InlineData("""{ "inboxes": [ { "name": "" } ] }""", "loadwatch.json:1: inboxes[0].name: may not be blank")]
     [InlineData("""{ "contacts": [ { "id": "a b" } ] }""",
         """loadwatch.json:1: contacts[0].id: "a b" may hold letters, digits, - and _ only, 40 at most""")]
@@ -76,6 +84,8 @@ public sealed class ConfigurationMistakesTests
         """loadwatch.json:1: groups[0].load_quantity: "banister_trmp" is not a quantity; did you mean "banister_trimp"?""")]
     [InlineData("""{ "groups": [ { "load_quantity": "distance_above_6_m_s" } ], "computation": { "speed_bounds": [2, 6.5] } }""",
         """loadwatch.json:1: groups[0].load_quantity: "distance_above_6_m_s" is not a quantity; did you mean "distance_above_6_5_m_s"?""")]
+    [InlineData("""{ "groups": [ { "load_fallbacks": ["foster_laod"] } ] }""",
+        """loadwatch.json:1: groups[0].load_fallbacks: "foster_laod" is not a quantity; did you mean "foster_load"?""")]
     public void AWordThatNamesNothing(string json, string fault) => Assert.Equal([fault], ConfigurationFolder.FaultsWith("loadwatch.json", json));
 
     [Theory]
@@ -130,6 +140,8 @@ public sealed class ConfigurationMistakesTests
     [InlineData("7_m_s", "is not the name of a quantity: a small letter, then small letters, digits and _, 60 at most")]
     [InlineData("", "is not the name of a quantity: a small letter, then small letters, digits and _, 60 at most")]
     [InlineData("speed_top", "is no load: a day's sum of it would mean nothing")]
+    [InlineData("rating", "is no load: a day's sum of it would mean nothing")]
+    [InlineData("one_repetition_max_of_squat", "is no load: a day's sum of it would mean nothing")]
     public void ANameThatNoQuantityHas(string name, string fault) => Assert.Equal(
         [$"loadwatch.json:1: limits.weekly_jump.quantities[1]: \"{name}\" {fault}"],
         ConfigurationFolder.FaultsWith("loadwatch.json", $$"""{ "limits": { "weekly_jump": { "quantities": ["distance", "{{name}}"] } } }"""));

@@ -42,6 +42,26 @@ public sealed class LoadQuantityTests
         Assert.Equal(quantity, read.Groups["squad"].LoadQuantity);
     }
 
+    [Fact]
+    public void ADistanceAboveAShareOfTheBestSpeedMayBeTheLoad()
+    {
+        var read = ConfigurationFolder.With(
+            "loadwatch.json",
+            """{ "groups": [ { "id": "squad", "load_quantity": "distance_above_85_percent_speed_max" } ], "computation": { "speed_max_shares": [0.5, 0.85, 1] } }""");
+
+        Assert.Equal("distance_above_85_percent_speed_max", read.Groups["squad"].LoadQuantity);
+        Assert.Equal([0.5, 0.85, 1], read.Computation.SpeedMaxShares);
+    }
+
+    [Fact]
+    public void TheFallbacksOfALoadKeepTheirOrder()
+    {
+        var read = ConfigurationFolder.With(
+            "loadwatch.json", """{ "groups": [ { "id": "squad", "load_fallbacks": ["minutes", "foster_load"] } ] }""");
+
+        Assert.Equal(["minutes", "foster_load"], read.Groups["squad"].LoadFallbacks);
+    }
+
     /// <summary>The highest speed of a day is not the sum of the highest speeds of its sessions.</summary>
     [Fact]
     public void TheTopSpeedIsNoLoad() => Assert.StartsWith(

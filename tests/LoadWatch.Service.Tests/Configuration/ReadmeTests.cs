@@ -59,9 +59,12 @@ public sealed class ReadmeTests
     }
 
     [Fact]
-    public void EveryRuleHasItsLimitsAndItsTable() =>
-        Assert.Equal(
-            RuleBook.All.Select(rule => $"**`{rule.Name}`**"), Limits.Select(row => row.Data.Item1).Where(heading => heading[0] == '*'));
+    public void EveryRuleHasItsLimitsAndItsTableInItsOrder()
+    {
+        var headings = RuleBook.All.Select(rule => $"**`{rule.Name}`**").ToList();
+        Assert.Equal(headings, Limits.Select(row => row.Data.Item1).Where(headings.Contains));
+        Assert.Equal(headings, headings.OrderBy(heading => Readme.IndexOf($"\n{heading}", StringComparison.Ordinal)));
+    }
 
     [Fact]
     public void EveryAnchorHasItsUnitAndItsRange()
@@ -79,7 +82,7 @@ public sealed class ReadmeTests
     [Fact]
     public void EveryKeyOfTheConfigurationIsNamed()
     {
-        var missing = new[] { typeof(InboxEntry), typeof(GroupEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(CsvLayout) }
+        var missing = new[] { typeof(InboxEntry), typeof(GroupEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(CsvLayout), typeof(CsvQuality) }
             .SelectMany(type => type.GetProperties())
             .Concat(typeof(LoadWatchFile).GetProperties().Where(property => property.Name != nameof(LoadWatchFile.Schema)))
             .Select(KeyOf)
@@ -152,6 +155,19 @@ public sealed class ReadmeTests
         Assert.Equal(("running", "club track"), (recording.Sport.Name, file.SourceName));
         Assert.Equal(24.5 / 3.6, recording.Samples[Channel.Speed][0], 12);
         Assert.Equal("2026-03-31T15:30:00Z", recording.Start!.Value.ToString()); // 17:30 in Vienna, summer time since 29 March.
+    }
+
+    [Fact]
+    public void TheExampleOfSeveralPeopleReadsTheExampleOfItsFile()
+    {
+        using var folder = new ConfigurationFolder();
+        folder.Write("loadwatch.json", $"{{ \"layouts\": [{Block("{\n  \"name\": \"pods\"")}] }}");
+
+        var file = new DecoderSet(folder.Read().Layouts).Decode(Encoding.UTF8.GetBytes(Block("player,time")));
+
+        Assert.Empty(file.Problems);
+        Assert.Equal(["Pod 01", "Pod 02"], file.Recordings.Select(recording => recording.Subject));
+        Assert.Equal([1.42, double.NaN], file.Recordings.Select(recording => recording.Samples[Channel.Speed] is [var speed, ..] ? speed : double.NaN));
     }
 
     private static string KeyOf(PropertyInfo property) =>

@@ -32,6 +32,37 @@ public sealed class RosterReaderTests
         Assert.Equal(new[] { first, second }.OfType<string>(), ConfigurationFolder.FaultsWith("roster.csv", $"{header}\n"));
 
     [Fact]
+    public void AliasesAndTheWordOnHeartRateAreRead()
+    {
+        var people = ConfigurationFolder.With(
+            "roster.csv",
+            "person,name,group,aliases,heart_rate_valid\nanna,Anna,squad,Ahola A.; 7 |7,no since 2026-03-01\nben,Ben,squad,,No\ncas,Cas,squad,9,yes\n").People;
+
+        Assert.Equal(["Ahola A.", "7"], people["anna"].Aliases);
+        Assert.Equal(new NodaTime.LocalDate(2026, 3, 1), people["anna"].HeartRateInvalidFrom);
+        Assert.False(people["ben"].HeartRateIsValidOn(new NodaTime.LocalDate(1900, 1, 1)));
+        Assert.Empty(people["ben"].Aliases);
+        Assert.Null(people["cas"].HeartRateInvalidFrom);
+    }
+
+    [Theory]
+    [InlineData("medication")]
+    [InlineData("no since March")]
+    [InlineData("false")]
+    public void AReasonIsAFaultThatDoesNotRepeatIt(string cell)
+    {
+        var fault = Assert.Single(ConfigurationFolder.FaultsWith("roster.csv", $"person,name,group,heart_rate_valid\nanna,Anna,squad,{cell}\n"));
+
+        Assert.Equal("roster.csv:2: heart_rate_valid: holds yes, no, or no since 2026-03-01, and never a reason", fault);
+    }
+
+    [Theory]
+    [InlineData("7", "7", "roster.csv:3: aliases: \"7\" already means anna")]
+    [InlineData("BEN", "", "roster.csv:2: aliases: \"BEN\" already means ben")]
+    public void AnAliasThatMeansTwoPeopleIsAFault(string ofAnna, string ofBen, string fault) => Assert.Equal(
+        [fault], ConfigurationFolder.FaultsWith("roster.csv", $"person,name,group,aliases\nanna,Anna,squad,{ofAnna}\nben,Ben,squad,{ofBen}\n"));
+
+    [Fact]
     public void TheSamePersonInAnotherCaseIsNoSecondPerson() => Assert.Equal(
         ["roster.csv:3: \"ANNA\" stands above already"],
         ConfigurationFolder.FaultsWith("roster.csv", $"{Header}anna,Anna,squad,,,\nANNA,Anna,squad,,,\n"));

@@ -46,7 +46,7 @@ public sealed class SampleFilesTests
     public void TheSampleFilesReadTogetherAndNameEveryAnchorKind()
     {
         using var folder = new ConfigurationFolder();
-        foreach (var name in new[] { "loadwatch.json", "roster.csv", "anchors.csv" })
+        foreach (var name in new[] { "loadwatch.json", "roster.csv", "anchors.csv", "devices.csv" })
         {
             folder.Write(name, File.ReadAllBytes(Repository.Config(name)));
         }
@@ -60,7 +60,8 @@ public sealed class SampleFilesTests
     }
 
     [Theory]
-    [InlineData("roster.csv", "person,name,group,birth_year,sex,time_zone")]
+    [InlineData("roster.csv", "person,name,group,birth_year,sex,time_zone,aliases,heart_rate_valid")]
+    [InlineData("devices.csv", "serial,person,from,to,session")]
     [InlineData("anchors.csv", "person,date,anchor,value,unit,source,exercise")]
     public void TheSampleTablesHoldEveryColumn(string name, string columns) => Assert.Equal(columns, File.ReadLines(Repository.Config(name)).First());
 

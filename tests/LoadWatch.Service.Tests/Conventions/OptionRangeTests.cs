@@ -5,9 +5,11 @@ namespace LoadWatch.Service.Tests.Conventions;
 
 public sealed class OptionRangeTests
 {
-    /// <summary>Lists of zone bounds: <see cref="ConfigurationReader"/> wants them rising from above 0, so a largest value would say nothing more.</summary>
+    /// <summary>Lists of bounds and shares: <see cref="ConfigurationReader"/> wants them rising and says from and to where.</summary>
     private static readonly string[] CheckedOtherwise =
-        ["ComputationEntry.HeartRateReserveBounds", "ComputationEntry.PowerBounds", "ComputationEntry.SpeedBounds"];
+    [
+        "ComputationEntry.HeartRateReserveBounds", "ComputationEntry.PowerBounds", "ComputationEntry.SpeedBounds", "ComputationEntry.SpeedMaxShares",
+    ];
 
     [Fact]
     public void EveryNumberOfTheConfigurationHasARange() => Assert.Equal(CheckedOtherwise, Convention.NumbersWithoutRange(typeof(LoadWatchFile)));

@@ -110,8 +110,15 @@ internal sealed class WorkingFolder : IDisposable
     {
         using var workplace = Workplace.OpenToDecide(ConfigPath);
         using var said = new StringWriter();
-        var code = AssignCommand.Run(workplace.Store, Sha(bytes), person, new Circumstances(now ?? Now), said, said);
+        var code = AssignCommand.Run(workplace, Sha(bytes), person, new Circumstances(now ?? Now), said, said);
         Xunit.Assert.True(code == ExitCode.Ok, said.ToString());
+    }
+
+    /// <summary>Writes into the store, as intake does.</summary>
+    public T Write<T>(Func<Workplace, StoreSession, T> write)
+    {
+        using var workplace = Workplace.OpenToDecide(ConfigPath);
+        return workplace.Store.Write(session => write(workplace, session));
     }
 
     /// <summary>All five tables as text.</summary>

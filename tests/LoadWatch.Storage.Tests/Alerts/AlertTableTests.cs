@@ -30,6 +30,7 @@ public sealed class AlertTableTests(SharedFolder shared) : StoreTest(shared)
             Judged = Some.Date.PlusDays(9),
             Severity = Severity.Warning,
             Text = "higher",
+            ShelvedUntil = Some.Date.PlusDays(20),
         };
         Store.Write(session => session.Alerts.Put(Some.Alert()));
         Store.Write(session => session.Alerts.Put(changed));

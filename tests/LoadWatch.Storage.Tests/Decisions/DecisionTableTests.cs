@@ -47,6 +47,67 @@ public sealed class DecisionTableTests(SharedFolder shared) : StoreTest(shared)
         Assert.Equal([Seen], Store.Read(session => session.Decisions.All()));
     }
 
+    [Theory]
+    [InlineData(DecisionKind.Ill)]
+    [InlineData(DecisionKind.Injured)]
+    [InlineData(DecisionKind.Away)]
+    [InlineData(DecisionKind.Returning)]
+    [InlineData(DecisionKind.Rest)]
+    [InlineData(DecisionKind.Match)]
+    public void ADecisionAboutDatesIsReadAsItWasWritten(DecisionKind kind)
+    {
+        var dated = Dated(kind, 0) with { Until = Some.Date.PlusDays(8), Via = "answers|inbox/answers.csv|Anna|2026-03-01" };
+        Add(dated);
+
+        Assert.Equal([dated], Store.Read(session => session.Decisions.OfPerson("anna")));
+        Assert.EndsWith("|anna|2026-03-02T05:00:00.000000000Z|answers|inbox/answers.csv|Anna|2026-03-01", dated.Id, StringComparison.Ordinal);
+        Assert.True(dated.IsAnswer);
+    }
+
+    [Fact]
+    public void TwoRowsMayDecideTheSameAtOneMoment()
+    {
+        var (first, second) = (Dated(DecisionKind.Ill, 0) with { Via = Decision.ViaRow("inbox/a.csv", "Anna", "1") }, Dated(DecisionKind.Ill, 0) with { Via = Decision.ViaRow("inbox/a.csv", "squad", "1") });
+
+        Add(second, first);
+
+        Assert.Equal([first, second], Store.Read(session => session.Decisions.InForce("anna")));
+    }
+
+    [Fact]
+    public void WhatWasWithdrawnIsInForceNowhere()
+    {
+        var shelved = Seen with { Kind = DecisionKind.Shelve, From = Some.Date, Until = Some.Date.PlusDays(5) };
+        var (early, late, away) = (Assigned(1, "bo", 1), Assigned(1, "cara", 2), Dated(DecisionKind.Away, 3));
+        Add(shelved, early, late, away, Withdrawn(late, 4), Withdrawn(shelved, 5), Withdrawn(away, 6));
+
+        Assert.Equal([early], Store.Read(session => session.Decisions.InForce()));
+        Assert.Equal(early, Store.Read(session => session.Decisions.Assigned())[Some.Sha(1)]);
+        Assert.Empty(Store.Read(session => session.Decisions.AssignedNoMore()));
+        Assert.Equal([shelved, Withdrawn(shelved, 5)], Store.Read(session => session.Decisions.OfAlert(shelved.Subject)));
+        Assert.Equal([early, late, Withdrawn(late, 4)], Store.Read(session => session.Decisions.OfArrival(Some.Sha(1))));
+
+        Add(Withdrawn(early, 7));
+
+        Assert.Empty(Store.Read(session => session.Decisions.Assigned()));
+        Assert.Equal(late, Assert.Single(Store.Read(session => session.Decisions.AssignedNoMore())).Value);
+    }
+
+    [Fact]
+    public void OfOneMomentTheEarlierDateComesFirst()
+    {
+        var (later, earlier) = (Dated(DecisionKind.Ill, 0), Dated(DecisionKind.Injured, 0) with { From = Some.Date.PlusDays(-3) });
+        Add(later, earlier);
+
+        Assert.Equal([earlier, later], Store.Read(session => session.Decisions.All()));
+    }
+
+    private static Decision Dated(DecisionKind kind, int second) =>
+        new(kind, "anna", "anna", Some.Moment + Duration.FromSeconds(second), "Kim", Note: null) { From = Some.Date };
+
+    private static Decision Withdrawn(Decision decision, int second) =>
+        new(DecisionKind.Withdraw, decision.Id, decision.Person, Some.Moment + Duration.FromSeconds(second), By: null, Note: null);
+
     private static Decision Assigned(int number, string person, int second) =>
         new(DecisionKind.Assign, Some.Sha(number), person, Some.Moment + Duration.FromSeconds(second), By: null, Note: null);
 

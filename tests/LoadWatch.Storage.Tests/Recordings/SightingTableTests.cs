@@ -15,7 +15,7 @@ public sealed class SightingTableTests(SharedFolder shared) : StoreTest(shared)
 
         var latest = Store.Read(session => session.Sightings.Latest("watches"));
 
-        Assert.Equal(new Sighting("watches", "anna/ride.fit", Some.Sha(1), Some.Moment, Stamp, Latest: true), Assert.Single(latest).Value);
+        Assert.Equal(new Sighting("watches", "anna/ride.fit", Some.Sha(1), Some.Moment, Stamp, Latest: true, Some.Moment), Assert.Single(latest).Value);
         Assert.Empty(Store.Read(session => session.Sightings.Latest("pods")));
     }
 
@@ -42,7 +42,7 @@ public sealed class SightingTableTests(SharedFolder shared) : StoreTest(shared)
         });
 
         Assert.Equal(
-            new Sighting("pods", "ratings.csv", Some.Sha(1), Some.Moment, newStamp, Latest: true),
+            new Sighting("pods", "ratings.csv", Some.Sha(1), Some.Moment, newStamp, Latest: true, later),
             Store.Read(session => session.Sightings.Latest("pods"))["ratings.csv"]);
     }
 

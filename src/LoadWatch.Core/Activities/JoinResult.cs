@@ -1,0 +1,15 @@
+using NodaTime;
+
+namespace LoadWatch.Activities;
+
+/// <param name="Activities">By date, then start, those without one last, then key.</param>
+/// <param name="Questions">By date, then sentence.</param>
+/// <param name="UnknownExercises">Words of set rows that the table of exercises does not hold, sorted; each asked for once.</param>
+public sealed record JoinResult(
+    IReadOnlyList<JoinedActivity> Activities,
+    IReadOnlyList<JoinQuestion> Questions,
+    IReadOnlyList<string> UnknownExercises);
+
+/// <summary>Rows that could not be joined, as a question to staff.</summary>
+/// <param name="Sentence">Without a name: what is not clear and what would settle it.</param>
+public sealed record JoinQuestion(LocalDate Date, string Sentence);

@@ -1,0 +1,93 @@
+using LoadWatch.Loads;
+using LoadWatch.People;
+using LoadWatch.Recordings;
+using LoadWatch.Stimulus;
+using NodaTime.Text;
+
+namespace LoadWatch.Activities;
+
+/// <summary>Makes one activity of everything that tells of a session.</summary>
+internal static class JoinedSession
+{
+    private static readonly string[] OfSets = [QuantityNames.Sets, QuantityNames.Repetitions, QuantityNames.Kilograms];
+
+    public static (JoinedActivity Activity, JoinQuestion? Question) Of(SessionParts session, Person person, ComputationSettings settings)
+    {
+        var (recording, stated, sport) = (session.Recording, session.Stated, session.Sport);
+        var date = recording?.LocalStart.Date ?? session.Maker.Date;
+        var log = Log(session);
+        var content = stated.FirstOrDefault(one => one.Content is not null)?.Content;
+        var quantities = Quantities(recording, stated, log);
+        var (regions, isRegionAsked) = JoinedStimulus.Of(recording, log?.Sets, content, sport, settings);
+        var activity = new JoinedActivity
+        {
+            Key = recording?.Winner.Key ?? KeyOfRows(session.Maker),
+            Date = date,
+            Start = recording?.Winner.Start ?? (session.Start is { } start ? (date + start).InZoneLeniently(person.Zone).ToInstant() : null),
+            Sport = sport,
+            Sources = Sorted([.. recording is null ? Array.Empty<string>() : [recording.Winner.Source], .. stated.Select(one => one.Source)]),
+            Quantities = quantities.Quantities,
+            Stimulus = regions,
+            UsableShare = recording?.Values.UsableShare ?? new Dictionary<Channel, double>(),
+            Remarks = [.. Remarks(recording, regions), .. log?.Sets!.Remarks ?? [], .. quantities.Remarks, .. NotCounted(session, log)],
+            Tables = Sorted(stated.Select(one => one.Layout)),
+            AddsLoad = session.AddsLoad,
+        };
+        return (activity, isRegionAsked ? new JoinQuestion(date, JoinWording.WhichRegions(content!.Value, date)) : null);
+    }
+
+    /// <summary>
+    /// The set log that counts: of several the one of the best grade, the first by layout among equals; none where the recording's own sets are graded as
+    /// well.
+    /// </summary>
+    private static StatedSession? Log(SessionParts session)
+    {
+        var best = session.Stated.Where(one => one.Sets is not null).MinBy(one => StatedSets.GradeOf(one.Sets!.Stimulus));
+        return best is not null && session.Recording?.Values is { } values && HasSets(values)
+            && StatedSets.GradeOf(values.Stimulus) <= StatedSets.GradeOf(best.Sets!.Stimulus)
+                ? null
+                : best;
+    }
+
+    private static bool HasSets(ActivityValues values) => values.Quantities.Any(quantity => quantity.Name == QuantityNames.Sets);
+
+    private static QuantityFill Quantities(RecordedActivity? recording, IReadOnlyList<StatedSession> stated, StatedSession? log)
+    {
+        var fill = new QuantityFill();
+        fill.Add((recording?.Values.Quantities ?? []).Where(one => log is null || !OfSets.Contains(one.Name, StringComparer.Ordinal)), "the recording");
+        fill.Add(log?.Sets!.Totals ?? [], log?.Layout ?? "");
+        foreach (var one in stated)
+        {
+            fill.Add(one.Quantities, one.Layout);
+        }
+
+        if (RatedLoad.Of(fill[RatedLoad.Rating], fill[QuantityNames.Minutes]) is { } rated)
+        {
+            fill.Add([rated], RatedLoad.Rating);
+        }
+
+        return fill;
+    }
+
+    /// <summary>The question for the regions of its sport is settled where something else tells them.</summary>
+    private static IEnumerable<string> Remarks(RecordedActivity? recording, IReadOnlyList<RegionStimulus> regions)
+    {
+        if (recording is null)
+        {
+            return [];
+        }
+
+        var question = SportRegions.Question(recording.Winner.Sport);
+        return recording.Values.Remarks.Where(remark => remark != question || !regions.Any(region => region.SeesHardWork));
+    }
+
+    private static IEnumerable<string> NotCounted(SessionParts session, StatedSession? log)
+    {
+        var others = session.Stated.Where(one => one.Sets is not null && one != log).Select(one => JoinWording.SetsBeside(one, log?.Layout));
+        return session.AddsLoad ? others : others.Append(JoinWording.LoadIsCountedElsewhere);
+    }
+
+    private static string KeyOfRows(StatedSession maker) => $"rows/{LocalDatePattern.Iso.Format(maker.Date)}/{maker.Layout}/{maker.Mark}";
+
+    private static IReadOnlyList<string> Sorted(IEnumerable<string> words) => [.. words.Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal)];
+}

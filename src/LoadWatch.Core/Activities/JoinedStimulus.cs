@@ -1,0 +1,47 @@
+using LoadWatch.Recordings;
+using LoadWatch.Rows;
+using LoadWatch.Stimulus;
+
+namespace LoadWatch.Activities;
+
+/// <summary>
+/// What a session with table rows asked of each region. Logged sets are the whole work of their session, so they stand for the recording's regions, but
+/// for those that power saw better; they are never added. Declared content speaks only where no channel could see hard work.
+/// </summary>
+internal static class JoinedStimulus
+{
+    private const string Unseen = "nothing recorded it: logged sets or declared content would tell";
+
+    /// <param name="log">The set log that counts, or null.</param>
+    /// <param name="content">As declared, or null.</param>
+    /// <returns>Legs first, and whether the content asks for a body region.</returns>
+    public static (IReadOnlyList<RegionStimulus> Regions, bool IsRegionAsked) Of(
+        RecordedActivity? recording, StatedSets? log, DeclaredContent? content, Sport sport, ComputationSettings settings)
+    {
+        var regions = SportRegions.Of(sport, settings.Sports) ?? (sport.IsTeamSport ? [BodyRegion.Legs] : null);
+        var seen = Seen(recording?.Values.Stimulus, log, regions);
+        if (content is not { } declared || seen.Any(region => region.SeesHardWork))
+        {
+            return (seen, false);
+        }
+
+        return DeclaredStimulus.IsHard(declared) && regions is null
+            ? (seen, true)
+            : (DeclaredStimulus.Of(declared, JoinWording.Word(declared), regions ?? BodyRegions.All, seen), false);
+    }
+
+    private static IReadOnlyList<RegionStimulus> Seen(
+        IReadOnlyList<RegionStimulus>? recorded, StatedSets? log, IReadOnlyList<BodyRegion>? regions)
+    {
+        if (log is null)
+        {
+            return recorded ?? [.. (regions ?? BodyRegions.All).Select(region => EnduranceEstimate.Nothing.For(region, [Unseen]))];
+        }
+
+        var ofPower = (recorded ?? []).Where(region => region.Channel == StimulusChannels.Power);
+        return [.. log.Stimulus.Concat(ofPower)
+            .GroupBy(region => region.Region)
+            .Select(region => region.OrderBy(one => one.Grade).First())
+            .OrderBy(region => region.Region)];
+    }
+}

@@ -1,0 +1,114 @@
+// Best of the last 8 weeks against the best of the 8 weeks before, down by more than the error of the figure. Windows and errors of speed and power are a
+// choice; the error of a one-repetition maximum estimated from repetitions is about 10 to 14 % (10.6 to 13.5 % of the mean in a direct test of equations).
+using LoadWatch.Days;
+using LoadWatch.Loads;
+using LoadWatch.People;
+using LoadWatch.Plans;
+using NodaTime;
+
+namespace LoadWatch.Findings;
+
+/// <summary>
+/// A best has gone down: top speed, top power, the estimated maximum of an exercise. Off in the off-season, in absence and return. It compares what was shown,
+/// not what could be: whoever has not tried shows less.
+/// </summary>
+public sealed class FallingCapacityRule : IRule
+{
+    public string Name => "falling_capacity";
+
+    public bool IsEnabled(RuleLimits limits) => limits.FallingCapacity.Enabled;
+
+    public IEnumerable<Finding> Evaluate(RuleSubject subject)
+    {
+        var limits = subject.Limits.FallingCapacity;
+        if (!limits.Enabled || subject.Days.Count == 0)
+        {
+            return [];
+        }
+
+        return subject.Activities
+            .SelectMany(activity => activity.Quantities.Where(quantity => Percent(quantity.Name, limits) is not null).Select(quantity => new Shown(activity.Date, quantity)))
+            .GroupBy(shown => shown.Quantity.Name, StringComparer.Ordinal)
+            .OrderBy(shown => shown.Key, StringComparer.Ordinal)
+            .SelectMany(shown => Evaluate(subject, shown.Key, [.. shown.OrderBy(one => one.Date)], Percent(shown.Key, limits)!.Value));
+    }
+
+    private static double? Percent(string quantity, FallingCapacityLimits limits) => quantity switch
+    {
+        QuantityNames.SpeedTop => limits.SpeedPercent,
+        QuantityNames.PowerTop => limits.PowerPercent,
+        _ when quantity.StartsWith(QuantityNames.OneRepetitionMaxOf, StringComparison.Ordinal) => limits.OneRepetitionMaxPercent,
+        _ => null,
+    };
+
+    private IEnumerable<Finding> Evaluate(RuleSubject subject, string quantity, List<Shown> shown, double percent)
+    {
+        LocalDate? since = null;
+        foreach (var day in subject.Days)
+        {
+            var read = IsOff(day) ? null : Read(shown, day.Date, subject.Limits.FallingCapacity);
+            since = read is not null && read.FallPercent > percent ? since ?? day.Date : null;
+            if (since is { } start)
+            {
+                yield return Find(subject.Person, day.Date, quantity, start, read!, percent, subject.Limits.FallingCapacity);
+            }
+        }
+    }
+
+    private static bool IsOff(Day day) => day.Plan.Absence is not null || day.Plan.ReturnDay is not null || day.Plan.IsIn(PlanWord.OffSeason);
+
+    private static Bests? Read(List<Shown> shown, LocalDate date, FallingCapacityLimits limits)
+    {
+        var (middle, first) = (date.PlusDays(-limits.Days), date.PlusDays(-2 * limits.Days));
+        var late = shown.Where(one => one.Date > middle && one.Date <= date).ToList();
+        var early = shown.Where(one => one.Date > first && one.Date <= middle).ToList();
+        return late.Count < limits.SessionsWanted || early.Count < limits.SessionsWanted
+            ? null
+            : new Bests(late.MaxBy(one => one.Quantity.Value)!, early.MaxBy(one => one.Quantity.Value)!, late.Count, early.Count);
+    }
+
+    private Finding Find(Person person, LocalDate date, string quantity, LocalDate since, Bests bests, double percent, FallingCapacityLimits limits) => new(
+        person.Id,
+        date,
+        Name,
+        Region: null,
+        Severity.Notice,
+        since,
+        bests.FallPercent,
+        percent,
+        "percent",
+        $"{Words(quantity)}: best of the last {limits.Days / 7} weeks {Value(bests.Late)} (on {Wording.Date(bests.Late.Date, date)}), "
+            + $"{Wording.Number(bests.FallPercent)} % below the {Value(bests.Early)} of the weeks before (on {Wording.Date(bests.Early.Date, date)}).",
+        Basis(bests, percent, limits))
+    {
+        Quantity = quantity,
+    };
+
+    private static string Words(string quantity) => quantity switch
+    {
+        QuantityNames.SpeedTop => "Top speed",
+        QuantityNames.PowerTop => "Top power",
+        _ => $"Estimated maximum of {quantity[QuantityNames.OneRepetitionMaxOf.Length..].Replace('_', ' ')}",
+    };
+
+    private static string Value(Shown shown) => $"{Wording.Number(shown.Quantity.Value)} {shown.Quantity.Unit}";
+
+    private static Evidence Basis(Bests bests, double percent, FallingCapacityLimits limits) => new(
+        "fall = (best of the stretch before - best of the last stretch) / best of the stretch before; raised above the error of the figure",
+        "stretches and errors of speed and power: a choice; error of an estimated maximum: 10.6 to 13.5 % of the mean in direct tests",
+        [
+            new("best", bests.Late.Quantity.Value, bests.Late.Quantity.Unit, $"on {Wording.IsoDate(bests.Late.Date)}, of {bests.LateSessions} sessions"),
+            new("best_before", bests.Early.Quantity.Value, bests.Early.Quantity.Unit, $"on {Wording.IsoDate(bests.Early.Date)}, of {bests.EarlySessions} sessions"),
+            new("fall", bests.FallPercent, "percent"),
+            new("error", percent, "percent"),
+            new("stretch", limits.Days, "days"),
+            new("sessions_wanted", limits.SessionsWanted, "count"),
+        ]);
+
+    private sealed record Shown(LocalDate Date, Quantity Quantity);
+
+    private sealed record Bests(Shown Late, Shown Early, int LateSessions, int EarlySessions)
+    {
+        public double FallPercent => Significant.Round((1 - (Late.Quantity.Value / Early.Quantity.Value)) * 100);
+    }
+}

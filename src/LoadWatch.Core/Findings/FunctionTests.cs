@@ -1,0 +1,53 @@
+// Cut-offs: Cruz-Jentoft et al. 2019, Age Ageing 48:16-31 (EWGSOP2). Grip below 27 kg (men), 16 kg (women); five chair stands in more than 15 s; gait speed
+// of 0.8 m/s or less; timed up and go of 20 s or more; short physical performance battery of 8 points or fewer; 400 m walk in 360 s or more or not completed.
+// The chair stand, the battery and the walk are from memory.
+using LoadWatch.People;
+
+namespace LoadWatch.Findings;
+
+/// <summary>A function test: its word, how to name it, its unit, and the published cut-off.</summary>
+/// <param name="Word">As tables write it.</param>
+/// <param name="Name">As sentences write it.</param>
+/// <param name="MoreIsBetter">False for times.</param>
+/// <param name="Limit">The cut-off in the unit; null without one for this person.</param>
+/// <param name="IsBeyond">Whether a value lies beyond a cut-off, by the operator of its source.</param>
+/// <param name="Words">The operator in words, before the cut-off.</param>
+public sealed record FunctionTest(
+    string Word,
+    string Name,
+    string Unit,
+    bool MoreIsBetter,
+    Func<Sex?, double?> Limit,
+    Func<double, double, bool> IsBeyond,
+    string Words);
+
+/// <summary>The function tests that LoadWatch knows.</summary>
+public static class FunctionTests
+{
+    public const string Grip = "grip_strength";
+    public const string ChairStands = "chair_stands_5";
+    public const string Gait = "gait_speed";
+    public const string UpAndGo = "timed_up_and_go";
+    public const string PerformanceBattery = "short_physical_performance_battery";
+    public const string Walk400 = "walk_400_m";
+
+    public static IReadOnlyList<FunctionTest> All { get; } =
+    [
+        new(Grip, "Grip strength", "kg", true, GripLimit, (value, limit) => value < limit, "below"),
+        new(ChairStands, "Five chair stands", "s", false, _ => 15, (value, limit) => value > limit, "above"),
+        new(Gait, "Gait speed", "m/s", true, _ => 0.8, (value, limit) => value <= limit, "at or below"),
+        new(UpAndGo, "Timed up and go", "s", false, _ => 20, (value, limit) => value >= limit, "at or above"),
+        new(PerformanceBattery, "Short physical performance battery", "points", true, _ => 8, (value, limit) => value <= limit, "at or below"),
+        new(Walk400, "400 m walk", "s", false, _ => 360, (value, limit) => value >= limit, "at or above"),
+    ];
+
+    public static FunctionTest? Of(string word) => All.FirstOrDefault(test => test.Word == word);
+
+    /// <summary>By sex, as the source gives it; not stated: no cut-off.</summary>
+    private static double? GripLimit(Sex? sex) => sex switch
+    {
+        Sex.Male => 27,
+        Sex.Female => 16,
+        _ => null,
+    };
+}

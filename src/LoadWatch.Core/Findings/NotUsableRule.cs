@@ -1,0 +1,75 @@
+// Sessions of the last 7 days of which a recorded channel had too little usable time. A choice.
+using LoadWatch.Activities;
+using LoadWatch.Days;
+using LoadWatch.Recordings;
+using NodaTime;
+
+namespace LoadWatch.Findings;
+
+/// <summary>Recordings come, but heart rate or power of them cannot be used: strap, sensor or watch want a look. Ends when fewer such sessions lie within the days.</summary>
+public sealed class NotUsableRule : IRule
+{
+    private static readonly Channel[] Watched = [Channel.HeartRate, Channel.Power];
+
+    public string Name => "not_usable";
+
+    public bool IsEnabled(RuleLimits limits) => limits.NotUsable.Enabled;
+
+    public IEnumerable<Finding> Evaluate(RuleSubject subject)
+    {
+        var limits = subject.Limits.NotUsable;
+        var useless = limits.Enabled ? Useless(subject, limits.UsableShare) : [];
+        LocalDate? since = null;
+        foreach (var day in useless.Count == 0 ? [] : subject.Days)
+        {
+            var lately = useless.FindAll(one => one.Date > day.Date.PlusDays(-limits.Days) && one.Date <= day.Date);
+            since = lately.Count >= limits.Sessions ? since ?? day.Date : null;
+            if (since is { } start)
+            {
+                yield return Find(subject, day, start, lately, limits);
+            }
+        }
+    }
+
+    private static List<(LocalDate Date, Channel Channel, double Share)> Useless(RuleSubject subject, double wanted) =>
+    [
+        .. subject.Activities
+            .SelectMany(activity => Poorest(subject, activity, wanted))
+            .OrderBy(one => one.Date),
+    ];
+
+    /// <summary>One entry a session: the poorest of its channels. Heart rate that is not to be used for this person is not missed.</summary>
+    private static IEnumerable<(LocalDate Date, Channel Channel, double Share)> Poorest(RuleSubject subject, JoinedActivity activity, double wanted) => activity.UsableShare
+        .Where(share => Watched.Contains(share.Key) && share.Value < wanted)
+        .Where(share => share.Key != Channel.HeartRate || subject.Person.HeartRateIsValidOn(activity.Date))
+        .OrderBy(share => share.Value)
+        .ThenBy(share => share.Key)
+        .Take(1)
+        .Select(share => (activity.Date, share.Key, share.Value));
+
+    private Finding Find(
+        RuleSubject subject, Day day, LocalDate since, List<(LocalDate Date, Channel Channel, double Share)> lately, NotUsableLimits limits)
+    {
+        var channels = string.Join(" and ", lately.Select(one => ChannelWords.Of(one.Channel)).Distinct(StringComparer.Ordinal));
+        return new Finding(
+            subject.Person.Id,
+            day.Date,
+            Name,
+            Region: null,
+            Severity.Notice,
+            since,
+            lately.Count,
+            limits.Sessions,
+            "sessions",
+            $"Too little usable {channels} in {lately.Count} sessions of the last {limits.Days} days, last on {Wording.Date(lately[^1].Date, day.Date)}: no load from them.",
+            new Evidence(
+                "sessions of the last days with a recorded channel usable for less than the wanted share of its time",
+                "a choice",
+                [
+                    .. lately.Select(one => new EvidenceItem($"usable_{Wording.IsoDate(one.Date)}", one.Share, "share", ChannelWords.Of(one.Channel))),
+                    new("sessions_limit", limits.Sessions, "count"),
+                    new("days", limits.Days, "days"),
+                    new("usable_share_wanted", limits.UsableShare, "share"),
+                ]));
+    }
+}

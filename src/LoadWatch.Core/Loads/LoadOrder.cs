@@ -1,0 +1,80 @@
+using NodaTime;
+
+namespace LoadWatch.Loads;
+
+/// <summary>
+/// Chooses the load of each session of one person: the group's own quantity, else the first of its fallbacks that the session has and that the
+/// person's sessions convert. While a person's heart rate says little about effort (medicine, for one), every load from it is off, also as half of a
+/// pair, and the rating of effort comes first among the fallbacks, named or not.
+/// Keeps the lines of every month that it was asked for. Not safe for several threads.
+/// </summary>
+public sealed class LoadOrder
+{
+    private readonly string wanted;
+    private readonly IReadOnlyList<string> fallbacks;
+    private readonly IReadOnlyList<string> fallbacksWithoutHeartRate;
+    private readonly Func<LocalDate, bool> heartRateValid;
+    private readonly Lazy<SessionLoads[]> sessions;
+    private readonly Dictionary<string, LoadPairs> pairs = new(StringComparer.Ordinal);
+    private readonly Dictionary<(LocalDate Month, string From), ConversionLine?> lines = [];
+
+    /// <param name="loadQuantity">Name of the group's load.</param>
+    /// <param name="fallbacks">Names of what stands in for it, first choice first.</param>
+    /// <param name="sessions">All of the person, in any order; those of the 12 months before a date at least.</param>
+    /// <param name="heartRateValid">Whether loads from heart rate mean anything for the person on a date.</param>
+    public LoadOrder(
+        string loadQuantity, IReadOnlyList<string> fallbacks, IReadOnlyList<SessionLoads> sessions, Func<LocalDate, bool> heartRateValid)
+    {
+        wanted = loadQuantity;
+        this.fallbacks = fallbacks;
+        fallbacksWithoutHeartRate = [.. fallbacks.Prepend(QuantityNames.FosterLoad).Where(name => !QuantityNames.IsOfHeartRate(name))];
+        this.heartRateValid = heartRateValid;
+        this.sessions = new Lazy<SessionLoads[]>(() => [.. sessions.Select(WithoutInvalid)]);
+    }
+
+    /// <summary>The load of a session, or null where it has neither the quantity nor a fallback with a line.</summary>
+    /// <param name="session">It need not be among the person's sessions: a line never rests on its own month.</param>
+    public ChosenLoad? Choose(SessionLoads session)
+    {
+        var usable = WithoutInvalid(session);
+        return usable[wanted] is { } own ? new ChosenLoad(own.Value, own.Estimated, wanted, Line: null) : Converted(usable);
+    }
+
+    private ChosenLoad? Converted(SessionLoads session)
+    {
+        foreach (var from in heartRateValid(session.Date) ? fallbacks : fallbacksWithoutHeartRate)
+        {
+            if (session[from] is { } there && Line(session.Date, from) is { } line)
+            {
+                return new ChosenLoad(line.Apply(there.Value), Estimated: true, from, line);
+            }
+        }
+
+        return null;
+    }
+
+    private ConversionLine? Line(LocalDate date, string from)
+    {
+        var key = (LoadConversion.FirstOfMonth(date), from);
+        if (!lines.TryGetValue(key, out var line))
+        {
+            lines[key] = line = LoadConversion.For(Pairs(from), date, wanted, from);
+        }
+
+        return line;
+    }
+
+    private LoadPairs Pairs(string from)
+    {
+        if (!pairs.TryGetValue(from, out var found))
+        {
+            pairs[from] = found = new LoadPairs(sessions.Value, wanted, from);
+        }
+
+        return found;
+    }
+
+    private SessionLoads WithoutInvalid(SessionLoads session) => heartRateValid(session.Date)
+        ? session
+        : session with { Quantities = [.. session.Quantities.Where(quantity => !QuantityNames.IsOfHeartRate(quantity.Name))] };
+}

@@ -1,0 +1,56 @@
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Decoding.Csv;
+
+/// <summary>The people or devices of a file in order of first appearance; one without a name where the layout tells none apart.</summary>
+internal sealed class SampleSubjects(CsvTable table, CsvLayout layout)
+{
+    /// <summary>More is no squad but a column that means something else.</summary>
+    private const int SubjectsAtMost = 500;
+    private const int LongestCharacters = 100;
+
+    private readonly int? column = table.Find(layout.PersonColumn);
+    private readonly Dictionary<string, SampleSubject> known = new(StringComparer.Ordinal);
+    private readonly List<SampleSubject> inOrder = [];
+
+    public IReadOnlyList<SampleSubject> InOrder => inOrder;
+
+    /// <returns>Null with the problem, for a row that belongs to nobody.</returns>
+    public SampleSubject? Of(CsvRows rows, out Problem? problem)
+    {
+        var name = column is { } index ? rows.Text(index) : "";
+        if (known.TryGetValue(name, out var found))
+        {
+            problem = null;
+            return found;
+        }
+
+        problem = Complaint(rows, name);
+        return problem is null ? Add(name) : null;
+    }
+
+    private Problem? Complaint(CsvRows rows, string name) => column is not { } index ? null : name.Length switch
+    {
+        0 => table.Wrong(rows, index, "no person or device"),
+        > LongestCharacters => table.Wrong(rows, index, $"more than {LongestCharacters} characters name no person or device"),
+        _ when inOrder.Count == SubjectsAtMost => table.Wrong(rows, index, $"more than {SubjectsAtMost} people in one file"),
+        _ => null,
+    };
+
+    private SampleSubject Add(string name)
+    {
+        var added = new SampleSubject(column is null ? null : name);
+        known.Add(name, added);
+        inOrder.Add(added);
+        return added;
+    }
+}
+
+/// <summary>The rows of one person or device.</summary>
+/// <param name="Name">As the file writes it; null where it tells none apart.</param>
+internal sealed record SampleSubject(string? Name)
+{
+    public ClockTrack Clock { get; } = new();
+
+    public SampleColumns Samples { get; } = new();
+}

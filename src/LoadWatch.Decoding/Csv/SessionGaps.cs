@@ -1,0 +1,61 @@
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Decoding.Csv;
+
+/// <summary>Cuts the rows of one person at long gaps: a file of several people may hold the sessions of a whole day or camp.</summary>
+internal static class SessionGaps
+{
+    /// <summary>A choice: longer than a half-time or a wait on the bench, shorter than the time between two sessions.</summary>
+    private const long LongestMilliseconds = 60 * 60_000;
+
+    /// <summary>By time; within one the rows keep the order of the file. Every row is in exactly one.</summary>
+    public static IReadOnlyList<SampleSeries> Split(SampleSeries rows)
+    {
+        var order = ByTime(rows.UnixMilliseconds);
+        var starts = Starts(rows.UnixMilliseconds, order);
+        if (starts.Count == 1)
+        {
+            return [rows];
+        }
+
+        return [.. starts.Select((start, i) => OfFile(rows, order[start..(i + 1 < starts.Count ? starts[i + 1] : order.Length)]))];
+    }
+
+    private static int[] ByTime(ReadOnlySpan<long> times)
+    {
+        var order = new int[times.Length];
+        var ascending = true;
+        for (var row = 0; row < order.Length; row++)
+        {
+            order[row] = row;
+            ascending &= row == 0 || times[row] >= times[row - 1];
+        }
+
+        if (!ascending)
+        {
+            Array.Sort(times.ToArray(), order);
+        }
+
+        return order;
+    }
+
+    private static List<int> Starts(ReadOnlySpan<long> times, int[] order)
+    {
+        List<int> starts = [0];
+        for (var place = 1; place < order.Length; place++)
+        {
+            if (times[order[place]] - times[order[place - 1]] > LongestMilliseconds)
+            {
+                starts.Add(place);
+            }
+        }
+
+        return starts;
+    }
+
+    private static SampleSeries OfFile(SampleSeries rows, int[] session)
+    {
+        Array.Sort(session);
+        return rows.Take(session);
+    }
+}

@@ -1,0 +1,55 @@
+using LoadWatch.Days;
+using LoadWatch.Findings;
+using LoadWatch.Plans;
+using static LoadWatch.Tests.Days.Training;
+
+namespace LoadWatch.Tests.Findings;
+
+public class PlannedSilenceTests
+{
+    private static readonly SilenceRule Rule = new();
+
+    [Fact]
+    public void TwoPlannedSessionsWithoutARecordingAreToldOnceTheyHadTimeToComeIn()
+    {
+        var findings = Rule.Of(Weeks(3, recorded: day => day < 14));
+
+        Assert.Equal(On(19), findings[0].Date);
+        Assert.Equal("No recording of the last 2 planned sessions, the first on 20 January.", findings[0].Text);
+        Assert.Equal((2, 2, "sessions"), (findings[0].Value, findings[0].Limit, findings[0].Unit));
+    }
+
+    [Fact]
+    public void OneMissedSessionRaisesNothing() => Assert.Empty(Rule.Of(Weeks(12, recorded: day => day != 29)));
+
+    [Fact]
+    public void TheNextRecordingEndsIt() => Assert.Equal(On(21), Rule.Of(Weeks(4, recorded: day => day < 14 || day >= 22))[^1].Date);
+
+    [Fact]
+    public void AnAbsenceMutesIt()
+    {
+        var days = Weeks(4, recorded: day => day < 14)
+            .Select(day => day.Date >= On(15) ? day with { Plan = day.Plan with { Absence = AbsenceWord.Away, Expected = 0 } } : day)
+            .ToList();
+
+        Assert.Empty(Rule.Of(days));
+    }
+
+    [Fact]
+    public void WhereAPlanExpectsRecordingsTheOwnRhythmIsNotAsked() =>
+        Assert.Empty(Rule.Of(Enumerable.Range(0, 40).Select(day => Of(day, recorded: day < 20, expected: day is 5 or 21)).ToList()));
+
+    /// <summary>Sessions on Tuesdays and Thursdays, each with a recording expected.</summary>
+    private static List<Day> Weeks(int weeks, Func<int, bool> recorded) => Enumerable.Range(0, weeks * 7)
+        .Select(day => Of(day, day % 7 is 1 or 3 && recorded(day), expected: day % 7 is 1 or 3))
+        .ToList();
+
+    private static Day Of(int day, bool recorded, bool expected) => new()
+    {
+        Person = "anna",
+        Date = On(day),
+        State = recorded ? DayState.Recorded : DayState.Unknown,
+        DaysSinceRecorded = recorded ? 0 : 5,
+        Plan = expected ? DayPlan.None with { Expected = 1 } : DayPlan.None,
+    };
+}

@@ -1,0 +1,89 @@
+using LoadWatch.Loads;
+using LoadWatch.Plans;
+using LoadWatch.Rows;
+using LoadWatch.Storage.Files;
+using LoadWatch.Storage.Rows;
+using NodaTime;
+
+namespace LoadWatch.Storage.Tests.Rows;
+
+public sealed class RowTableTests(SharedFolder shared) : StoreTest(shared)
+{
+    private static readonly LocalDate Date = new(2026, 3, 2);
+
+    public static TheoryData<RowKind, RowContent> Contents => new()
+    {
+        { RowKind.Sessions, new SessionRow(2, new LocalTime(17, 30), "soccer", "rondo", 12.5, 7, [new Quantity("distance", 812.5, "m", false)], DeclaredContent.Match) },
+        { RowKind.Sets, new SetRow(1, null, "leg press", "B2", 3, 10, null, 7, null, 8.5, null, SetRowLoad.Pin, false, true) },
+        { RowKind.Tests, new TestRow("grip_strength", null, null, null, null, TestOutcome.Unable, "left", "old one", 0.43) },
+        { RowKind.Days, new LoadWatch.Rows.DayRow(DayWord.Absent) },
+        { RowKind.Plan, new PlanRow(PlanWord.LightWeek, Date.PlusDays(6), null, new LocalTime(0, 30), true, null) },
+        { RowKind.Answers, new AnswerRow(AnswerWord.BelongsTo, null, null, "pods/7.fit", "Ida", "swapped \"pods\"") },
+    };
+
+    [Theory]
+    [MemberData(nameof(Contents))]
+    public void EveryKindComesBackAsItWasWritten(RowKind kind, RowContent content)
+    {
+        Store.Write(session => session.TableRows.Put([Row("t", "anna", kind, content, 0)]));
+
+        var read = Assert.Single(Store.Read(session => session.TableRows.OfPerson("anna", kind)));
+        Assert.Equal(content.GetType(), read.Content.GetType());
+        Assert.Equal(RowText.Write(content), RowText.Write(read.Content));
+    }
+
+    [Fact]
+    public void OfTwoTablesThatTellTheSameRowTheOneSeenLaterCounts()
+    {
+        Store.Write(session => session.TableRows.Put([Rating("form", 7, 2), Rating("sheet", 4, 1)]));
+
+        Assert.Equal(7, ((SessionRow)Assert.Single(Store.Read(session => session.TableRows.OfPerson("anna", RowKind.Sessions))).Content).Rating);
+        Assert.Equal(2, Store.Read(session => session.TableRows.OfScope("form").Count + session.TableRows.OfScope("sheet").Count));
+    }
+
+    [Fact]
+    public void RowsOfNobodyAreFoundAndPlansOfGroupsAreNoneOfThem()
+    {
+        Store.Write(session => session.TableRows.Put([
+            Rating("form", 7, 0) with { Person = null, Subject = "Pod 7" },
+            Row("plan", "", RowKind.Plan, new PlanRow(PlanWord.Rest, null, null, null, false, null), 0) with { Person = null, Subject = "squad" },
+        ]));
+
+        Assert.Equal("Pod 7", Assert.Single(Store.Read(session => session.TableRows.OfNobody())).Subject);
+    }
+
+    [Fact]
+    public void ARemovedRowIsGone()
+    {
+        Store.Write(session =>
+        {
+            session.TableRows.Put([Rating("form", 7, 0)]);
+            session.TableRows.Remove([Rating("form", 3, 5)]);
+        });
+
+        Assert.Empty(Store.Read(session => session.TableRows.OfScope("form")));
+    }
+
+    [Fact]
+    public void VersionsAreTheNamesOfTableContentsInTheOrderTheyWereSeen()
+    {
+        Store.Write(session =>
+        {
+            foreach (var (sha, night) in new[] { (Some.Sha(1), 0), (Some.Sha(2), 1), (Some.Sha(1), 2) })
+            {
+                session.Arrivals.AddWaiting(sha, null, sha, 10);
+                session.Sightings.Upsert("inbox", "form/ratings.csv", sha, Some.Moment + Duration.FromDays(night), new FileStamp(10, 1, "1"));
+                session.TableVersions.Note(sha, "ratings", namedByFolder: false);
+            }
+        });
+
+        Assert.Equal([Some.Sha(2), Some.Sha(1)], Store.Read(session => session.TableVersions.Seen()).Select(version => version.Sha));
+        Assert.All(Store.Read(session => session.TableVersions.Seen()), version => Assert.Equal("inbox/form/ratings.csv", version.Scope));
+    }
+
+    private static StoredRow Rating(string scope, double rating, int night) =>
+        Row(scope, "anna", RowKind.Sessions, new SessionRow(null, null, null, null, 60, rating, [], null), night);
+
+    private static StoredRow Row(string scope, string person, RowKind kind, RowContent content, int night) =>
+        new(scope, kind, "ratings", person, person, Date, "2026-03-02|1", Some.Moment + Duration.FromDays(night), content);
+}
