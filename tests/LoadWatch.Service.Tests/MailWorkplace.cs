@@ -15,7 +15,8 @@ internal sealed class MailWorkplace : IDisposable
 
     /// <param name="mail">The inside of the section; null for none.</param>
     /// <param name="address">Of the contact.</param>
-    public MailWorkplace(string? mail = Sound, string address = "ada@example.org")
+    /// <param name="contact">More keys of the contact.</param>
+    public MailWorkplace(string? mail = Sound, string address = "ada@example.org", string contact = "")
     {
         Directory.CreateDirectory(At("inbox"));
         File.WriteAllText(At("roster.csv"), "person,name,group,birth_year,sex,time_zone\nann,Ann,squad,1990,f,\nben,Ben,squad,,,\n");
@@ -25,7 +26,7 @@ internal sealed class MailWorkplace : IDisposable
         var section = mail is null ? "" : $", \"mail\": {{ {mail} }}";
         File.WriteAllText(
             At("loadwatch.json"),
-            $$"""{ "time_zone": "UTC", "contacts": [ { "id": "staff", "mail": {{System.Text.Json.JsonSerializer.Serialize(address)}} } ]{{section}} }""");
+            $$"""{ "time_zone": "UTC", "contacts": [ { "id": "staff", "mail": {{System.Text.Json.JsonSerializer.Serialize(address)}}{{contact}} } ]{{section}} }""");
     }
 
     public string At(string name) => Path.Combine(folder.FullName, name);

@@ -11,14 +11,14 @@ namespace LoadWatch.Activities;
 public static class ActivityComputation
 {
     /// <summary>Raised by one whenever a formula, a cut or a quantity changes: what an older program computed is then computed again.</summary>
-    public const int Version = 3;
+    public const int Version = 4;
 
     /// <summary>Anchors are taken as they hold on the recording's local date.</summary>
     /// <exception cref="ArgumentException">The recording carries no date.</exception>
     public static ActivityValues Compute(Recording recording, Person person, AnchorBook anchors, ComputationSettings settings)
     {
         var date = LocalStart.Of(recording, person).Date;
-        var usable = new UsableRecording(recording, settings.UsableShareWanted);
+        var usable = new UsableRecording(person.HeartRateIsValidOn(date) ? recording : WithoutHeartRate(recording), settings.UsableShareWanted);
         var loads = ActivityLoads.Of(usable, date, person, anchors, settings);
         var stimulus = SessionStimulus.Of(usable, date, person, anchors, settings);
         return new ActivityValues
@@ -35,6 +35,10 @@ public static class ActivityComputation
             Remarks = [.. usable.TooLittle.Select(TooLittle), .. loads.Remarks, .. stimulus.Remarks],
         };
     }
+
+    /// <summary>Where heart rate says nothing about the person's effort, it is as if it had not been recorded.</summary>
+    private static Recording WithoutHeartRate(Recording recording) =>
+        recording with { Samples = recording.Samples.Without(Channel.HeartRate), LateHeartRates = [] };
 
     /// <summary>Weighted by time; the plain mean where the readings stand for no time.</summary>
     private static double? Mean(UsableChannel? channel)

@@ -22,7 +22,7 @@ public sealed record ComputationSettings
     /// <summary>Shares of the person's best speed from which distance counts apart, 0.5 to 1, rising. A choice.</summary>
     public IReadOnlyList<double> SpeedMaxShares { get; init; } = [0.8, 0.9];
 
-    /// <summary>Body regions by exercise word. An exercise that is not here is asked for, not guessed.</summary>
+    /// <summary>Body regions by exercise word in canonical form (<see cref="Recordings.ExerciseWord"/>). An exercise that is not here is asked for, not guessed.</summary>
     public IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> Exercises { get; init; } = DefaultRegions.Exercises;
 
     /// <summary>Body regions that endurance channels speak for, by sport name.</summary>

@@ -53,15 +53,26 @@ public static class SamplesDigest
         digest = Add(digest, set.Start?.ToUnixTimeMilliseconds() ?? SampleSeries.Undated);
         digest = Add(digest, set.DurationSeconds ?? double.NaN);
         digest = Add(digest, set.Active ? 1L : 0L);
-        foreach (var letter in set.Exercise ?? "")
-        {
-            digest = Add(digest, (long)letter);
-        }
-
+        digest = Add(digest, set.Exercise ?? "");
         digest = Add(digest, set.Repetitions ?? double.NaN);
         digest = Add(digest, set.Kilograms ?? double.NaN);
-        return Add(digest, set.RepetitionsInReserve ?? double.NaN);
+        digest = Add(digest, set.RepetitionsInReserve ?? double.NaN);
+        return OfSetLog(digest, set);
     }
+
+    /// <summary>What only set logs say, each behind its own number and only where it is said: sets of devices keep the digest that they had before.</summary>
+    private static ulong OfSetLog(ulong digest, StrengthSet set)
+    {
+        digest = set.Machine is null ? digest : Add(Add(digest, 1L), set.Machine);
+        digest = set.Hardness is { } hardness ? Add(Add(digest, 2L), hardness) : digest;
+        digest = set.Load == SetLoad.Weight ? digest : Add(Add(digest, 3L), (long)set.Load);
+        digest = set.Pin is { } pin ? Add(Add(digest, 4L), pin) : digest;
+        digest = set.IsHold ? Add(digest, 5L) : digest;
+        digest = set.IsFast ? Add(digest, 6L) : digest;
+        return set.ConcentricSeconds is { } seconds ? Add(Add(digest, 7L), seconds) : digest;
+    }
+
+    private static ulong Add(ulong digest, string word) => word.Aggregate(digest, (sum, letter) => Add(sum, (long)letter));
 
     /// <summary>Every NaN counts as the same, and so do both zeros.</summary>
     private static ulong Add(ulong digest, double value) =>

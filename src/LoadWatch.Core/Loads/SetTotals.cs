@@ -8,7 +8,10 @@ public static class SetTotals
     /// <summary>Beyond it a stated load is a slip of writing; no one lifts it.</summary>
     public const double MostKilograms = 10_000;
 
-    /// <summary>Sums over what is stated; a total of which nothing is stated is absent, and the remark says which sets lack what.</summary>
+    /// <summary>
+    /// Sums over what is stated; a total of which nothing is stated is absent, and the remark says which sets lack what. A hold has no repetitions, and
+    /// body weight alone is 0 kg: neither lacks anything.
+    /// </summary>
     public static (IReadOnlyList<Quantity> Quantities, string? Remark) Of(IReadOnlyList<StrengthSet> sets)
     {
         var work = sets.Where(set => set.Active).ToList();
@@ -17,8 +20,9 @@ public static class SetTotals
             return ([], null);
         }
 
-        var counted = work.Where(set => set.Repetitions is not null).ToList();
-        var weighed = counted.Where(set => set.Kilograms is >= 0 and <= MostKilograms).ToList();
+        var moved = work.FindAll(set => !set.IsHold);
+        var counted = moved.FindAll(set => set.Repetitions is not null);
+        var weighed = counted.FindAll(set => Kilograms(set) is >= 0 and <= MostKilograms);
         List<Quantity> quantities = [new(QuantityNames.Sets, work.Count, "count", Estimated: false)];
         if (counted.Count > 0)
         {
@@ -27,20 +31,22 @@ public static class SetTotals
 
         if (weighed.Count > 0)
         {
-            var kilograms = weighed.Sum(set => set.Kilograms!.Value * set.Repetitions!.Value);
+            var kilograms = weighed.Sum(set => Kilograms(set)!.Value * set.Repetitions!.Value);
             quantities.Add(new(QuantityNames.Kilograms, Significant.Round(kilograms), "kg", Estimated: false));
         }
 
         quantities.AddRange(OneRepetitionMaxEstimate.Of(counted));
-        return (quantities, Remark(work.Count, counted.Count, weighed.Count));
+        return (quantities, Remark(work.Count, moved.Count, counted.Count, weighed.Count));
     }
 
-    private static string? Remark(int sets, int counted, int weighed)
+    private static double? Kilograms(StrengthSet set) => set.Kilograms ?? (set.Load == SetLoad.BodyWeight ? 0 : null);
+
+    private static string? Remark(int sets, int moved, int counted, int weighed)
     {
         List<string> lacking = [];
-        if (counted < sets)
+        if (counted < moved)
         {
-            lacking.Add($"{sets - counted} without repetitions");
+            lacking.Add($"{moved - counted} without repetitions");
         }
 
         if (weighed < counted)

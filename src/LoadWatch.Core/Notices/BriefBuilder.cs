@@ -46,14 +46,27 @@ public static class BriefBuilder
         .ThenBy(news => RuleTexts.Order(news.Alert.Key.Rule))
         .ThenBy(news => news.Alert.Id, StringComparer.Ordinal);
 
-    /// <summary>The name to show: the person's own, or "You".</summary>
-    internal static string NameOf(Person person, bool self) => self ? "You" : OneLine.Of(person.Name);
+    /// <summary>The name to show: the person's own, or "You"; the id for a name of which nothing can be shown.</summary>
+    internal static string NameOf(Person person, bool self) => (self, OneLine.Of(person.Name)) switch
+    {
+        (true, _) => "You",
+        (_, "") => person.Id,
+        (_, var name) => name,
+    };
 
     /// <summary>An acknowledged alert asks for nothing more; it stays beside one that does, and in the group's table.</summary>
     internal static bool ToLookAt(BriefSubject subject) =>
         subject.Alerts.Any(news => IsActive(news) && (news.IsNew || news.Alert.State == AlertState.Unacknowledged));
 
-    private static List<BriefSubject> Shown(Contact contact, IReadOnlyList<BriefSubject> subjects) =>
+    /// <summary>The contact's people, each with the alerts that may be told to a reader of this role.</summary>
+    private static List<BriefSubject> Shown(Contact contact, IReadOnlyList<BriefSubject> subjects)
+    {
+        var people = PeopleOf(contact, subjects);
+        var view = RoleView.Of(contact.Role, people.Count);
+        return [.. people.Select(subject => subject with { Alerts = [.. subject.Alerts.Where(news => view.ShowsRule(news.Alert.Key.Rule))] })];
+    }
+
+    private static List<BriefSubject> PeopleOf(Contact contact, IReadOnlyList<BriefSubject> subjects) =>
     [
         .. subjects
             .Where(subject => contact.People.Count > 0

@@ -22,6 +22,12 @@ public sealed record Notice(
 
     /// <summary>The <see cref="FlaggedList"/> of that moment; null where nobody had a day yet.</summary>
     public string? Flagged { get; init; }
+
+    /// <summary>The text as it may leave the machine, frozen like the other; null where that is <see cref="Text"/> itself.</summary>
+    public string? MailText { get; init; }
+
+    /// <summary>The same for <see cref="Html"/>.</summary>
+    public string? MailHtml { get; init; }
 }
 
 /// <summary>Why a notice is told, or not.</summary>

@@ -9,7 +9,8 @@ namespace LoadWatch.Notices;
 public static class OneLine
 {
     /// <summary>
-    /// Controls, line breaks and direction marks become a space, runs of space one space; the ends are trimmed, halves of a surrogate pair replaced.
+    /// Controls, line breaks and direction marks become a space, runs of space one space; the ends are trimmed, halves of a surrogate pair replaced. Marks
+    /// that show nothing are dropped, but for the joiners, which some scripts are written with.
     /// </summary>
     public static string Of(string text)
     {
@@ -17,6 +18,11 @@ public static class OneLine
         var gap = false;
         foreach (var rune in text.EnumerateRunes())
         {
+            if (ShowsNothing(rune.Value))
+            {
+                continue;
+            }
+
             if (Separates(rune))
             {
                 gap = line.Length > 0;
@@ -53,6 +59,9 @@ public static class OneLine
         || Rune.GetUnicodeCategory(rune) is UnicodeCategory.Control or UnicodeCategory.LineSeparator or UnicodeCategory.ParagraphSeparator
         || TurnsDirection(rune.Value);
 
+    private static bool ShowsNothing(int code) =>
+        code is 0x00AD or 0x180E or 0x200B or (>= 0x2060 and <= 0x2064) or (>= 0xFFF9 and <= 0xFFFB) or (>= 0xE0000 and <= 0xE007F);
+
     private static bool TurnsDirection(int code) =>
-        code is 0x061C or 0x200E or 0x200F or (>= 0x202A and <= 0x202E) or (>= 0x2066 and <= 0x2069) or 0xFEFF;
+        code is 0x061C or 0x200E or 0x200F or (>= 0x202A and <= 0x202E) or (>= 0x2066 and <= 0x206F) or 0xFEFF;
 }

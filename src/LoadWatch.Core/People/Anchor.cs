@@ -44,6 +44,8 @@ public enum AnchorSource
 /// <param name="Value">In the unit of its kind.</param>
 /// <param name="Exercise">The exercise of a one-repetition maximum; null for every other kind.</param>
 /// <param name="Note">How it came about: the test, or the equation with its authors and year.</param>
+/// <param name="Machine">The machine of a one-repetition maximum, in the gym's own words; null holds without a machine and for every machine that has
+/// none of its own.</param>
 public sealed record Anchor(
     string Person,
     LocalDate? Date,
@@ -51,4 +53,5 @@ public sealed record Anchor(
     double Value,
     AnchorSource Source,
     string? Exercise = null,
-    string? Note = null);
+    string? Note = null,
+    string? Machine = null);

@@ -1,3 +1,4 @@
+using LoadWatch.Recordings;
 using NodaTime;
 
 namespace LoadWatch.People;
@@ -5,14 +6,16 @@ namespace LoadWatch.People;
 /// <summary>Every anchor of every person, asked for by date: a value for a date uses only anchors dated that day or before (I-5).</summary>
 public sealed class AnchorBook
 {
-    private readonly ILookup<(string Person, AnchorKind Kind, string? Exercise), Anchor> anchors;
+    private readonly ILookup<(string Person, AnchorKind Kind, string? Exercise, string? Machine), Anchor> anchors;
 
     private readonly IReadOnlyList<Anchor> all;
 
+    /// <summary>Words of exercises and machines are taken in their canonical form (<see cref="ExerciseWord"/>).</summary>
     public AnchorBook(IEnumerable<Anchor> anchors)
     {
         all = [.. anchors];
-        this.anchors = all.ToLookup(anchor => (anchor.Person, anchor.Kind, anchor.Exercise));
+        this.anchors = all.ToLookup(anchor =>
+            (anchor.Person, anchor.Kind, ExerciseWord.Canonical(anchor.Exercise), ExerciseWord.Canonical(anchor.Machine)));
     }
 
     public static AnchorBook Empty { get; } = new([]);
@@ -22,15 +25,21 @@ public sealed class AnchorBook
 
     /// <summary>
     /// The anchor that holds on <paramref name="date"/>, or null: measured before observed before estimated, then the latest, an undated
-    /// one last.
+    /// one last. A machine's own anchors go before those without a machine; those of other machines never count.
     /// </summary>
-    public Anchor? On(LocalDate date, string person, AnchorKind kind, string? exercise = null) =>
-        Best(anchors[(person, kind, exercise)].Where(anchor => anchor.Date is null || anchor.Date <= date));
+    public Anchor? On(LocalDate date, string person, AnchorKind kind, string? exercise = null, string? machine = null) =>
+        Best(HeldOn(date, person, kind, exercise, machine)) ?? Best(HeldOn(date, person, kind, exercise, machine: null));
 
     /// <summary>The same among the anchors dated from <paramref name="earliest"/> on; an undated one is of unknown age and does not
     /// count.</summary>
     public Anchor? Since(LocalDate earliest, LocalDate date, string person, AnchorKind kind, string? exercise = null) =>
-        Best(anchors[(person, kind, exercise)].Where(anchor => anchor.Date >= earliest && anchor.Date <= date));
+        Best(Of(person, kind, exercise, machine: null).Where(anchor => anchor.Date >= earliest && anchor.Date <= date));
+
+    private IEnumerable<Anchor> HeldOn(LocalDate date, string person, AnchorKind kind, string? exercise, string? machine) =>
+        Of(person, kind, exercise, machine).Where(anchor => anchor.Date is null || anchor.Date <= date);
+
+    private IEnumerable<Anchor> Of(string person, AnchorKind kind, string? exercise, string? machine) =>
+        anchors[(person, kind, ExerciseWord.Canonical(exercise), ExerciseWord.Canonical(machine))];
 
     private static Anchor? Best(IEnumerable<Anchor> candidates) => candidates
         .OrderBy(anchor => anchor.Source)

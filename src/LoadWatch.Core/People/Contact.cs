@@ -12,6 +12,18 @@ public enum ContactRole
     Self,
 }
 
+/// <summary>How the people watched are named in what leaves the machine.</summary>
+public enum NamesShown
+{
+    Full,
+
+    /// <summary>First and last initial, with a number where two people of a brief share them.</summary>
+    Initials,
+
+    /// <summary>Nobody: counts only.</summary>
+    None,
+}
+
 /// <summary>Who is told, about which groups, when.</summary>
 /// <param name="Groups">Ids of the groups in the brief, in the order shown.</param>
 /// <param name="People">Ids of single people in the brief, for somebody who watches only themselves; empty for whole groups.</param>
@@ -29,4 +41,7 @@ public sealed record Contact(
 {
     /// <summary>Address for mail, or null for none.</summary>
     public string? Mail { get; init; }
+
+    /// <summary>Names in the bodies of mail; page and notice file, which stay on the machine, hold them in full.</summary>
+    public NamesShown Names { get; init; } = NamesShown.Full;
 }

@@ -4,7 +4,10 @@ namespace LoadWatch.Stimulus;
 /// choice.</summary>
 public sealed class HardBouts
 {
-    private const long ShortestMilliseconds = 3000;
+    /// <summary>The shortest stretch that counts, s.</summary>
+    public const int ShortestSeconds = 3;
+
+    private const long ShortestMilliseconds = ShortestSeconds * 1000;
     private const long MergedGapMilliseconds = 2000;
 
     private long start;

@@ -36,11 +36,11 @@ public readonly record struct Band(double Low, double Mid, double High);
 /// <param name="Grade">Of the best channel that saw it.</param>
 /// <param name="Channel">What it was read from, a word of <see cref="StimulusChannels"/>; <c>none</c> where every figure is
 /// unknown.</param>
-/// <param name="HardBouts">Contiguous stretches of at least 3 s at a relative drive of 0.70 or more, count, of endurance channels; null
-/// for sets, where the channel cannot tell, or where no true maximum is known.</param>
-/// <param name="HardRepetitions">Repetitions at a relative drive of 0.70 or more, count, of sets; null for endurance channels or where no
-/// set could be read.</param>
-/// <param name="HardSets">Sets with at least one hard repetition (mid value), count.</param>
+/// <param name="HardBouts">Contiguous stretches of at least 3 s at a relative drive of 0.70 or more, count, of endurance channels and holds; null
+/// for sets without a hold, where the channel cannot tell, or where no true maximum is known.</param>
+/// <param name="HardRepetitions">Repetitions at a relative drive of 0.70 or more, count, of sets, 0 where every set was a hold; null for endurance
+/// channels or where no set could be read.</param>
+/// <param name="HardSets">Sets with at least one hard repetition, and holds with their hard bout (mid value), count.</param>
 /// <param name="SlowSeconds">Recruited fraction of the slow class summed over time, s.</param>
 /// <param name="MediumSeconds">The same for the medium (fatigue-resistant fast) class, s.</param>
 /// <param name="LargeSeconds">The same for the largest (fast-twitch) class, s.</param>

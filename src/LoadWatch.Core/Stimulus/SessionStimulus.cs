@@ -15,6 +15,9 @@ namespace LoadWatch.Stimulus;
 /// <param name="Remarks">In plain words.</param>
 public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IReadOnlyList<string> Remarks)
 {
+    /// <summary>Exercises of working sets that no body region is known for, in canonical form: to be asked for once, over all people.</summary>
+    public IReadOnlyList<string> Questions { get; init; } = [];
+
     private const string NoChannel =
         "nothing to read it from: power with critical_power, or heart rate with heart_rate_rest and heart_rate_max";
 

@@ -1,4 +1,3 @@
-using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Recordings;
 using NodaTime;
@@ -6,65 +5,109 @@ using NodaTime;
 namespace LoadWatch.Stimulus;
 
 /// <summary>How hard a working set was against the person's maximum.</summary>
-/// <param name="Repetitions">1 or more.</param>
-/// <param name="RelativeLoad">Load over one-repetition maximum, above 0.</param>
+/// <param name="Repetitions">1 or more; 0 of a hold.</param>
+/// <param name="RelativeLoad">Load over one-repetition maximum, above 0; of a hold its hardness over 10; 0 where only the declaration is known.</param>
 /// <param name="RelativeError">Of the maximum.</param>
-/// <param name="Reserve">Repetitions that would still have been possible; null where not stated.</param>
-public sealed record SetDemand(int Repetitions, double RelativeLoad, double RelativeError, double? Reserve, Grade Grade)
+/// <param name="Reserve">Repetitions that would still have been possible; null where not stated or not asked.</param>
+public sealed record SetDemand(int Repetitions, double RelativeLoad, double RelativeError, double? Reserve, Grade Grade, SetRule Rule)
 {
-    /// <summary>A maximum measured this long ago still counts as measured for grade A, days. A choice.</summary>
-    public const int FreshDays = 56;
+    /// <summary>What each repetition counts for, s; of a hold, the part of it that is read.</summary>
+    public double SecondsEach { get; init; } = 1;
 
-    private const int MostRepetitions = 1000;
+    /// <summary>Whether the maximum of the exercise alone stood in for that of the machine.</summary>
+    public bool IsMaximumBorrowed { get; init; }
 
     /// <summary>
-    /// The demand, or null with what is missing. Load over anchored maximum where both are known (no load, or 0 kg, is body weight);
-    /// else the load chart from repetitions done and in reserve, up to 12 together.
+    /// The demand, or null with what is missing. In this order:
+    /// <list type="bullet">
+    /// <item>A hold, with seconds and a hardness or reserve: <see cref="SetRule.Hold"/>, D. The rating says how near the end was, so the last 3 s are
+    /// read at e = hardness / 10 and what came before is left out: a lower bound, a choice. The load is not asked: a maximum of lifting is none of
+    /// holding.</item>
+    /// <item>No repetitions: unknown.</item>
+    /// <item>Fast, with load and maximum, within <see cref="FastDrive"/>: <see cref="SetRule.Fast"/>, C. Without either: <see
+    /// cref="SetRule.DeclaredFast"/>, D; the reserve is not asked, fast work ends long before failure.</item>
+    /// <item>Load and maximum: <see cref="SetRule.LoadAndMaximum"/>; A with a counted reserve against a freshly measured maximum of this machine, else
+    /// B.</item>
+    /// <item>Repetitions done and in reserve up to 12: <see cref="SetRule.Chart"/>; B with a load, D without (body weight, band, pin).</item>
+    /// <item>Otherwise unknown.</item>
+    /// </list>
     /// </summary>
     public static (SetDemand? Demand, string? Missing) Of(StrengthSet set, LocalDate date, string person, AnchorBook anchors)
     {
-        if (set.Repetitions is not (>= 1 and <= MostRepetitions) || set.Repetitions is not { } repetitions)
+        var stated = new StatedSet(set);
+        if (set.IsHold)
+        {
+            return OfHold(stated);
+        }
+
+        if (stated.Repetitions is not { } repetitions)
         {
             return (null, "repetitions");
         }
 
-        var kilograms = set.Kilograms is > 0 and <= SetTotals.MostKilograms ? set.Kilograms : null;
-        var reserve = set.RepetitionsInReserve is >= 0 and < double.PositiveInfinity ? set.RepetitionsInReserve : null;
-        var maximum = anchors.On(date, person, AnchorKind.OneRepetitionMax, set.Exercise);
-        if (kilograms is { } load && maximum is not null)
-        {
-            return (new SetDemand(repetitions, load / maximum.Value, ErrorOf(maximum), reserve, GradeOf(maximum, reserve, date)), null);
-        }
-
-        return reserve is { } left && LoadChart.Share(repetitions + left) is { } share
-            ? (FromChart(repetitions, share, left, kilograms is not null), null)
-            : (null, $"{(kilograms is null ? "load" : "one_repetition_max")}, or repetitions in reserve up to 12 in all");
+        var demand = stated.Kilograms is { } load && SetMaximum.Of(set, date, person, anchors) is { } maximum
+            ? FromMaximum(stated, repetitions, load, maximum)
+            : set.IsFast
+                ? new SetDemand(repetitions, 0, 0, Reserve: null, Grade.D, SetRule.DeclaredFast)
+                : FromChart(stated, repetitions);
+        return demand is null
+            ? (null, $"{(stated.Kilograms is null ? "load" : "one_repetition_max")}, or repetitions in reserve up to 12 in all")
+            : (demand with { SecondsEach = stated.RepetitionSeconds }, null);
     }
 
     /// <summary>
-    /// Relative drive of each repetition in a variant. Without a stated reserve it is the load alone, a lower bound, and the high variant
-    /// reads the set as taken to failure.
+    /// Relative drive of each repetition in a variant, or of the end of a hold. Without a stated reserve it is the load alone, a lower bound, and the high
+    /// variant reads the set as taken to failure.
     /// </summary>
     public IEnumerable<double> Drives(Variant variant)
     {
         var load = RelativeLoad / variant.Capacity(1, RelativeError);
         double? failing = Reserve is { } left ? Repetitions + left : variant.Side > 0 ? Repetitions : null;
-        return Enumerable.Range(1, Repetitions).Select(repetition => StrengthDrive.Of(load, repetition, failing));
+        return Rule switch
+        {
+            SetRule.Hold => [Math.Min(1, load)],
+            SetRule.Fast => Enumerable.Repeat(FastDrive.Of(load, variant), Repetitions),
+            SetRule.DeclaredFast => Enumerable.Repeat(FastDrive.Declared(variant), Repetitions),
+            _ => Enumerable.Range(1, Repetitions).Select(repetition => StrengthDrive.Of(load, repetition, failing)),
+        };
     }
 
-    private static SetDemand FromChart(int repetitions, double share, double reserve, bool loaded) => new(
-        repetitions,
-        share,
-        loaded ? CapacityError.Estimated : CapacityError.Population,
-        reserve,
-        loaded ? Grade.B : Grade.D);
-
-    private static double ErrorOf(Anchor maximum) =>
-        maximum.Source == AnchorSource.Measured ? CapacityError.Measured : CapacityError.Estimated;
-
-    private static Grade GradeOf(Anchor maximum, double? reserve, LocalDate date)
+    private static (SetDemand? Demand, string? Missing) OfHold(StatedSet stated)
     {
-        var fresh = maximum.Source == AnchorSource.Measured && maximum.Date is { } tested && tested >= date.PlusDays(-FreshDays);
-        return fresh && reserve is not null ? Grade.A : Grade.B;
+        if (stated.HeldSeconds is not { } held)
+        {
+            return (null, "seconds of the hold");
+        }
+
+        return stated.HoldHardness is { } hardness
+            ? (new SetDemand(0, hardness / 10, CapacityError.Population, Reserve: null, Grade.D, SetRule.Hold)
+            {
+                SecondsEach = Math.Min(held, HardBouts.ShortestSeconds),
+            }, null)
+            : (null, "hardness of the hold");
+    }
+
+    private static SetDemand FromMaximum(StatedSet stated, int repetitions, double load, SetMaximum maximum)
+    {
+        var share = load / maximum.Kilograms;
+        var demand = stated.Set.IsFast && FastDrive.Applies(share)
+            ? new SetDemand(repetitions, share, maximum.RelativeError, Reserve: null, Grade.C, SetRule.Fast)
+            : new SetDemand(repetitions, share, maximum.RelativeError, stated.Reserve, GradeOf(stated, maximum), SetRule.LoadAndMaximum);
+        return demand with { IsMaximumBorrowed = !maximum.IsOfMachine };
+    }
+
+    private static Grade GradeOf(StatedSet stated, SetMaximum maximum) =>
+        maximum.IsFresh && stated.CountedReserve is not null ? Grade.A : Grade.B;
+
+    private static SetDemand? FromChart(StatedSet stated, int repetitions)
+    {
+        if (stated.Reserve is not { } left || LoadChart.Share(repetitions + left) is not { } share)
+        {
+            return null;
+        }
+
+        return stated.Kilograms is null
+            ? new SetDemand(repetitions, share, CapacityError.Population, left, Grade.D, SetRule.Chart)
+            : new SetDemand(repetitions, share, CapacityError.Estimated, left, Grade.B, SetRule.Chart);
     }
 }

@@ -44,7 +44,7 @@ public static class MailMessageWriter
 
     private static MultipartAlternative Body(Notice notice, string digest)
     {
-        var body = new MultipartAlternative { Part(TextFormat.Plain, notice.Text), Part(TextFormat.Html, notice.Html) };
+        var body = new MultipartAlternative { Part(TextFormat.Plain, notice.MailText ?? notice.Text), Part(TextFormat.Html, notice.MailHtml ?? notice.Html) };
         body.ContentType.Boundary = $"=_{digest}";
         return body;
     }

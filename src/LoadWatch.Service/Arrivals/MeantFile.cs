@@ -1,3 +1,4 @@
+using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage;
@@ -20,7 +21,7 @@ public static class MeantFile
             [] => $"\"{word}\" is no file known here",
             [{ Kind: "gzip" or "zip" } archive] => $"{Name(session, archive)} is an archive; assign the files in it: {Members(session, archive)}",
             [{ State: ArrivalState.Aside or ArrivalState.Refused } useless] =>
-                $"{Name(session, useless)} has nothing to assign; it is {Words.Of(useless.State)}: {useless.Reason}",
+                $"{Name(session, useless)} has nothing to assign; it is {Words.Of(useless.State)}: {OneLine.Of(useless.Reason ?? "")}",
             [_] => null,
             _ => $"\"{word}\" is more than one file; name one by its digits: {Names(session, found)}",
         };
@@ -28,7 +29,7 @@ public static class MeantFile
 
     /// <summary>The first digits of its hash, and the smallest of its names.</summary>
     public static string Name(StoreSession session, Arrival arrival) =>
-        session.Sightings.Of(arrival.Sha) is [var first, ..] ? $"{arrival.Sha[..12]} ({first.Path})" : arrival.Sha[..12];
+        session.Sightings.Of(arrival.Sha) is [var first, ..] ? $"{arrival.Sha[..12]} ({OneLine.Of(first.Path)})" : arrival.Sha[..12];
 
     private static string Members(StoreSession session, Arrival archive) =>
         Names(session, session.Arrivals.All().Where(arrival => arrival.ParentSha == archive.Sha && arrival.Kind is not ("gzip" or "zip")).ToList());

@@ -1,5 +1,6 @@
 using System.CommandLine;
 using LoadWatch.Alerts;
+using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Explain;
 using LoadWatch.Service.Export;
@@ -54,7 +55,7 @@ public static class AckCommand
             return AlreadySaid(alert, DecisionTable.InForce(session.Decisions.OfAlert(alertId)));
         }
 
-        return $"Acknowledged: {alert.Text}";
+        return $"Acknowledged: {OneLine.Of(alert.Text)}";
     }
 
     private static string AlreadySaid(Alert alert, IReadOnlyList<Decision> decisions) =>

@@ -1,5 +1,6 @@
 using System.CommandLine;
 using LoadWatch.Alerts;
+using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
 
@@ -51,8 +52,8 @@ public static class AlertsCommand
         foreach (var alert in alerts)
         {
             Console.Out.WriteLine(
-                $"{configuration.People[alert.Key.Person].Name}: {Words.Of(alert.Severity)}, {Words.Of(alert.State)}{Shelved(alert)}, raised {Words.Date(alert.Raised)}");
-            Console.Out.WriteLine($"    {alert.Text}");
+                $"{OneLine.Of(configuration.People[alert.Key.Person].Name)}: {Words.Of(alert.Severity)}, {Words.Of(alert.State)}{Shelved(alert)}, raised {Words.Date(alert.Raised)}");
+            Console.Out.WriteLine($"    {OneLine.Of(alert.Text)}");
             Console.Out.WriteLine($"    {alert.Id}");
         }
 

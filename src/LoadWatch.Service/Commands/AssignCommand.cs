@@ -1,4 +1,5 @@
 using System.CommandLine;
+using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Explain;
@@ -52,7 +53,7 @@ public static class AssignCommand
         }
 
         effects.Make(new Decision(DecisionKind.Assign, arrival.Sha, person, circumstances.Now, circumstances.By, circumstances.Note));
-        var held = arrival.State == ArrivalState.Held ? $" Until then it is held: {arrival.Reason}." : "";
+        var held = arrival.State == ArrivalState.Held ? $" Until then it is held: {OneLine.Of(arrival.Reason ?? "")}." : "";
         return $"{name} is assigned to {person}; taken up by the next sweep.{held}";
     }
 }

@@ -1,8 +1,8 @@
 using System.CommandLine;
 using System.Security.Cryptography;
 using System.Text;
-using System.Text.Json;
 using LoadWatch.Decoding;
+using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
@@ -141,7 +141,7 @@ public static class InspectCommand
         foreach (var line in lines)
         {
             output.Write(separator);
-            output.Write(JsonSerializer.Serialize(line, Words.Json));
+            output.Write(Words.Line(line));
             separator = ",\n";
         }
 
@@ -151,8 +151,8 @@ public static class InspectCommand
     private static void WriteText(StreamWriter output, InspectLine line)
     {
         output.Write(line.Part is { } part
-            ? FormattableString.Invariant($"{line.File}  part {part}  {line.Sport}  {line.FirstSample ?? "no date"}  {line.Samples} samples\n")
-            : $"{line.File}  {line.Kind}: no recording\n");
+            ? FormattableString.Invariant($"{OneLine.Of(line.File)}  part {part}  {OneLine.Of(line.Sport ?? "")}  {line.FirstSample ?? "no date"}  {line.Samples} samples\n")
+            : $"{OneLine.Of(line.File)}  {line.Kind}: no recording\n");
         foreach (var (channel, numbers) in line.Channels)
         {
             output.Write(FormattableString.Invariant($"    {channel,-10} {numbers.N,7} readings, mean {numbers.Mean:0.##}, highest {numbers.Max:0.##}\n"));
@@ -160,7 +160,7 @@ public static class InspectCommand
 
         foreach (var problem in line.Problems)
         {
-            output.Write($"    {problem.Severity}: {problem.Text}\n");
+            output.Write($"    {problem.Severity}: {OneLine.Of(problem.Text)}\n");
         }
     }
 }

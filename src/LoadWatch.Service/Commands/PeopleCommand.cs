@@ -1,6 +1,6 @@
 using System.CommandLine;
-using System.Text.Json;
 using LoadWatch.Days;
+using LoadWatch.Notices;
 using LoadWatch.People;
 using LoadWatch.Plans;
 using LoadWatch.Service.Export;
@@ -37,7 +37,7 @@ public static class PeopleCommand
         });
         if (json)
         {
-            Console.Out.WriteLine(JsonSerializer.Serialize(lines, Words.Json));
+            Console.Out.WriteLine(Words.Line(lines));
         }
         else
         {
@@ -71,7 +71,7 @@ public static class PeopleCommand
         {
             table.AddRow(
                 Markup.Escape(line.Person),
-                Markup.Escape(line.Name),
+                Markup.Escape(OneLine.Of(line.Name)),
                 Markup.Escape(line.Group),
                 line.LastRecorded ?? "none",
                 line.WeekLoad is { } load ? FormattableString.Invariant($"{load:0}") : "?",

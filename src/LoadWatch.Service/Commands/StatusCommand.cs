@@ -1,5 +1,5 @@
 using System.CommandLine;
-using System.Text.Json;
+using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Export;
 using LoadWatch.Service.Health;
@@ -24,7 +24,7 @@ public static class StatusCommand
     {
         using var workplace = Workplace.OpenToRead(configPath);
         var summary = workplace.Store.Read(session => Summary(workplace, session));
-        Console.Out.WriteLine(json ? JsonSerializer.Serialize(summary, Words.Json) : Text(summary));
+        Console.Out.WriteLine(json ? Words.Line(summary) : Text(summary));
         return ExitCode.Ok;
     }
 
@@ -47,11 +47,11 @@ public static class StatusCommand
             ? $"Last sweep: {service.LastSweep}{(service.Done ? "" : $", failed: {service.Failure}")}; files that cannot be read: {service.Unreadable}"
             : "No sweep yet (loadwatch sweep, or loadwatch run).";
         var faults = summary.Service is { } known
-            ? new[] { known.ConfigurationFault }.OfType<string>().Concat(known.MissingInboxes.Select(name => $"The inbox \"{name}\" cannot be listed."))
+            ? (known.ConfigurationFault?.Split('\n') ?? []).Concat(known.MissingInboxes.Select(name => $"The inbox \"{name}\" cannot be listed."))
             : [];
         return string.Join(
             Environment.NewLine,
-            [$"LoadWatch {summary.Version}", sweep, $"Arrivals: {arrivals}", $"People: {summary.People}; deliveries waiting: {summary.DeliveriesWaiting}", .. faults, .. summary.Undelivered]);
+            [$"LoadWatch {summary.Version}", sweep, $"Arrivals: {arrivals}", $"People: {summary.People}; deliveries waiting: {summary.DeliveriesWaiting}", .. faults.Select(OneLine.Of), .. summary.Undelivered.Select(OneLine.Of)]);
     }
 
     private sealed record StatusSummary(

@@ -1,4 +1,5 @@
 using System.CommandLine;
+using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Export;
 using LoadWatch.Service.Health;
@@ -41,7 +42,7 @@ public static class SweepCommand
             .Concat(report.Undelivered.Select(line => $"Not delivered yet: {line}"))
             .Concat(report.GivenUp.Select(line => $"Not delivered, given up: {line}")))
         {
-            Console.Error.WriteLine(line);
+            Console.Error.WriteLine(OneLine.Of(line));
         }
 
         foreach (var page in report.Pages)

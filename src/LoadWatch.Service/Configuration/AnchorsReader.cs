@@ -1,15 +1,16 @@
 using System.Globalization;
 using LoadWatch.People;
+using LoadWatch.Recordings;
 using NodaTime;
 using NodaTime.Text;
 
 namespace LoadWatch.Service.Configuration;
 
-/// <summary>Reads <c>anchors.csv</c>: person, date, anchor, value, unit, source, exercise. A blank date holds from the beginning, a blank source is measured.</summary>
+/// <summary>Reads <c>anchors.csv</c>: person, date, anchor, value, unit, source, exercise, machine. A blank date holds from the beginning, a blank source is measured.</summary>
 public static class AnchorsReader
 {
     private static readonly string[] Required = ["person", "anchor", "value", "unit"];
-    private static readonly string[] Optional = ["date", "source", "exercise"];
+    private static readonly string[] Optional = ["date", "source", "exercise", "machine"];
 
     /// <param name="people">The roster, by id.</param>
     /// <param name="exercises">Exercises whose body region is known.</param>
@@ -38,7 +39,8 @@ public static class AnchorsReader
 
         var value = ValueOf(row, kind, faults);
         var exercise = ExerciseOf(row, kind, exercises, faults);
-        return faults.Count > before ? null : new Anchor(person.Id, date, kind.Kind, value, source, exercise);
+        var machine = MachineOf(row, kind, faults);
+        return faults.Count > before ? null : new Anchor(person.Id, date, kind.Kind, value, source, exercise, Machine: machine);
     }
 
     private static Person? PersonOf(TableRow row, IReadOnlyDictionary<string, Person> people, List<ConfigurationFault> faults)
@@ -117,7 +119,7 @@ public static class AnchorsReader
 
     private static string? ExerciseOf(TableRow row, AnchorKindInfo kind, IReadOnlyCollection<string> exercises, List<ConfigurationFault> faults)
     {
-        var exercise = row["exercise"];
+        var exercise = ExerciseWord.Canonical(row["exercise"]);
         if (kind.Kind != AnchorKind.OneRepetitionMax && exercise is not null)
         {
             faults.Add(row.Fault($"exercise: only one_repetition_max has an exercise, not {kind.Name}"));
@@ -129,5 +131,16 @@ public static class AnchorsReader
         }
 
         return exercise;
+    }
+
+    private static string? MachineOf(TableRow row, AnchorKindInfo kind, List<ConfigurationFault> faults)
+    {
+        var machine = row["machine"];
+        if (kind.Kind != AnchorKind.OneRepetitionMax && machine is not null)
+        {
+            faults.Add(row.Fault($"machine: only one_repetition_max has a machine, not {kind.Name}"));
+        }
+
+        return machine;
     }
 }

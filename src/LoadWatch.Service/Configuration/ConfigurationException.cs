@@ -1,3 +1,5 @@
+using LoadWatch.Notices;
+
 namespace LoadWatch.Service.Configuration;
 
 /// <summary>The configuration cannot be used. Every fault found, each with file, line and what would be right.</summary>
@@ -16,5 +18,5 @@ public sealed class ConfigurationException(IReadOnlyList<ConfigurationFault> fau
 public sealed record ConfigurationFault(string File, long? Line, string Reason)
 {
     /// <summary><c>roster.csv:3: "juniors" is not a group; did you mean "junior"?</c></summary>
-    public override string ToString() => Line is { } line ? $"{File}:{line}: {Reason}" : $"{File}: {Reason}";
+    public override string ToString() => OneLine.Of(Line is { } line ? $"{File}:{line}: {Reason}" : $"{File}: {Reason}");
 }

@@ -6,6 +6,7 @@ using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
 using LoadWatch.Loads;
 using LoadWatch.People;
+using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Stimulus;
 using NodaTime;
@@ -36,7 +37,7 @@ public sealed class ConfigurationReader
         var json = WithoutMark(Bytes(path, name));
         var file = Parse(json);
         var zone = faults.Zone(file.TimeZone, "$.time_zone") ?? MachineZone.Get();
-        var exercises = Regions(file.Computation.Exercises, DefaultRegions.Exercises, "$.computation.exercises");
+        var exercises = Regions(file.Computation.Exercises, DefaultRegions.Exercises, ExerciseWord.Canonical, "$.computation.exercises");
         var computation = new ComputationSettings
         {
             UsableShareWanted = file.Computation.UsableShareWanted,
@@ -45,7 +46,7 @@ public sealed class ConfigurationReader
             SpeedBounds = Ascending(file.Computation.SpeedBounds, "$.computation.speed_bounds"),
             SpeedMaxShares = Shares(file.Computation.SpeedMaxShares, "$.computation.speed_max_shares"),
             Exercises = exercises,
-            Sports = Regions(file.Computation.Sports, DefaultRegions.Sports, "$.computation.sports"),
+            Sports = Regions(file.Computation.Sports, DefaultRegions.Sports, word => word, "$.computation.sports"),
         };
         var groups = Groups(file, json);
         CheckLayouts(file.Layouts);
@@ -163,13 +164,28 @@ public sealed class ConfigurationReader
     }
 
     private Dictionary<string, IReadOnlyList<BodyRegion>> Regions(
-        IReadOnlyDictionary<string, IReadOnlyList<string>> own, IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> shipped, string at)
+        IReadOnlyDictionary<string, IReadOnlyList<string>> own,
+        IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> shipped,
+        Func<string, string?> canonical,
+        string at)
     {
+        var seen = new HashSet<string>(StringComparer.Ordinal);
         var all = shipped.ToDictionary(pair => pair.Key, pair => pair.Value, StringComparer.Ordinal);
         foreach (var (word, regions) in own)
         {
             faults.CheckWords(regions, BodyRegions.All.Select(BodyRegions.Word), $"{at}.{word}", "a body region");
-            all[word] = regions.Select(BodyRegions.Parse).OfType<BodyRegion>().ToList();
+            if (canonical(word) is not { } key)
+            {
+                faults.Add($"{at}.{word}", $"\"{word}\" holds no letter");
+            }
+            else if (!seen.Add(key))
+            {
+                faults.Add($"{at}.{word}", $"\"{key}\" stands above already, written otherwise");
+            }
+            else
+            {
+                all[key] = regions.Select(BodyRegions.Parse).OfType<BodyRegion>().ToList();
+            }
         }
 
         return all;

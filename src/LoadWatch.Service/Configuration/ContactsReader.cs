@@ -41,6 +41,7 @@ internal static class ContactsReader
                 entry.BriefDays.ToHashSet())
             {
                 Mail = entry.Mail.Length > 0 ? entry.Mail : null,
+                Names = entry.Names,
             });
         }
 

@@ -149,6 +149,9 @@ public sealed record ContactEntry
 
     /// <summary>Address for mail; blank for none.</summary>
     public string Mail { get; init; } = "";
+
+    /// <summary>How mail names the people: <c>full</c>, <c>initials</c>, or <c>none</c> (counts only). Page and notice file name them in full.</summary>
+    public NamesShown Names { get; init; } = NamesShown.Full;
 }
 
 /// <summary>What may be set of the computation.</summary>

@@ -25,7 +25,7 @@ public sealed record MailEntry
     /// <summary>File that holds the password and nothing else, readable by nobody but its owner.</summary>
     public string PasswordFile { get; init; } = "";
 
-    /// <summary>Name of a systemd credential that holds the password, instead of the file.</summary>
+    /// <summary>Name of a credential that holds the password, instead of the file: of systemd, or of the Windows Credential Manager.</summary>
     public string PasswordCredential { get; init; } = "";
 
     /// <summary>PEM file of the authority that signed the server's certificate; blank for those that this machine trusts.</summary>

@@ -1,6 +1,8 @@
+using System.Runtime.Versioning;
+
 namespace LoadWatch.Service.Configuration;
 
-/// <summary>Fetches the mail password from its file or from systemd. It is in no message and no record (I-12).</summary>
+/// <summary>Fetches the mail password from its file, from systemd or from the Windows Credential Manager. It is in no message and no record (I-12).</summary>
 /// <param name="resolve">Makes a path of the configuration absolute.</param>
 internal sealed class MailSecret(Func<string, string> resolve)
 {
@@ -18,7 +20,7 @@ internal sealed class MailSecret(Func<string, string> resolve)
         _ => FromCredential(entry.PasswordCredential),
     };
 
-    /// <summary>systemd gives credentials to the service alone, so a command started by hand does without: it can check, but not send.</summary>
+    /// <summary>The service's credentials are for the service alone, so a command started by hand does without: it can check, but not send.</summary>
     private static MailPassword FromCredential(string name)
     {
         const string place = "$.mail.password_credential";
@@ -27,10 +29,20 @@ internal sealed class MailSecret(Func<string, string> resolve)
             return new MailPassword(place) { Fault = $"\"{name}\" is not the name of a credential" };
         }
 
+        if (OperatingSystem.IsWindows())
+        {
+            return FromWindows(place, name);
+        }
+
         return Environment.GetEnvironmentVariable("CREDENTIALS_DIRECTORY") is { Length: > 0 } folder
             ? FromFile(place, Path.Combine(folder, name), name, mayBeShared: true)
             : new MailPassword(place) { Missing = $"the credential {name} is given by systemd to the service only" };
     }
+
+    [SupportedOSPlatform("windows")]
+    private static MailPassword FromWindows(string place, string name) => WindowsCredential.Read(name) is { } password
+        ? Checked(place, password, name)
+        : new MailPassword(place) { Missing = $"the credential {name} is not in the Windows Credential Manager of the account that runs this" };
 
     private static MailPassword FromFile(string place, string path, string shown, bool mayBeShared)
     {
@@ -42,16 +54,17 @@ internal sealed class MailSecret(Func<string, string> resolve)
             }
 
             // An editor's line end at the end of the file is not part of the password.
-            var password = File.ReadAllText(path).TrimEnd('\r', '\n');
-            return password.Length > 0 && !password.Any(char.IsControl)
-                ? new MailPassword(place) { Password = password }
-                : new MailPassword(place) { Fault = $"\"{shown}\" does not hold one line with the password" };
+            return Checked(place, File.ReadAllText(path).TrimEnd('\r', '\n'), shown);
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException)
         {
             return new MailPassword(place) { Fault = $"\"{shown}\" cannot be read: {(e is FileNotFoundException ? "it is not there" : e.GetType().Name)}" };
         }
     }
+
+    private static MailPassword Checked(string place, string password, string shown) => password.Length > 0 && !password.Any(char.IsControl)
+        ? new MailPassword(place) { Password = password }
+        : new MailPassword(place) { Fault = $"\"{shown}\" does not hold one line with the password" };
 }
 
 /// <summary>What came of fetching it; all three null where none is needed.</summary>

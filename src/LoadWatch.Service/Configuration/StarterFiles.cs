@@ -39,7 +39,7 @@ public static class StarterFiles
 
             """,
         ["anchors.csv"] = """
-            person,date,anchor,value,unit,source,exercise
+            person,date,anchor,value,unit,source,exercise,machine
 
             """,
     };

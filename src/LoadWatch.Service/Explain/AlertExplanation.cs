@@ -2,6 +2,7 @@ using System.Globalization;
 using System.Text;
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
+using LoadWatch.Notices;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Decisions;
@@ -21,7 +22,7 @@ public static class AlertExplanation
     private static string Write(Alert alert, IReadOnlyList<AlertChange> changes, IReadOnlyList<Decision> decisions)
     {
         var text = new StringBuilder();
-        text.AppendLine(CultureInfo.InvariantCulture, $"{alert.Text}");
+        text.AppendLine(CultureInfo.InvariantCulture, $"{OneLine.Of(alert.Text)}");
         text.AppendLine(CultureInfo.InvariantCulture, $"{Words.Of(alert.Severity)}, {Words.Of(alert.State)}{(alert.ShelvedUntil is { } until ? $", shelved until {Words.Date(until)}" : "")}, raised {Words.Date(alert.Raised)}");
         foreach (var decision in decisions)
         {
@@ -32,7 +33,7 @@ public static class AlertExplanation
         {
             text.AppendLine();
             text.AppendLine(CultureInfo.InvariantCulture, $"{Words.Date(change.Date)}  {Words.Of(change.Reason)}: {Words.Of(change.From)} -> {Words.Of(change.To)}");
-            text.AppendLine(CultureInfo.InvariantCulture, $"    {change.Text}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {OneLine.Of(change.Text)}");
             Append(text, change.Evidence);
         }
 

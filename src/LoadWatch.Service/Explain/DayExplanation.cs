@@ -1,8 +1,11 @@
 using System.Globalization;
 using System.Text;
+using LoadWatch.Activities;
 using LoadWatch.Days;
+using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
+using LoadWatch.Service.Pipeline;
 using LoadWatch.Stimulus;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Activities;
@@ -26,23 +29,24 @@ public static class DayExplanation
         var text = new StringBuilder();
         if (day is null)
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"{known.Name}: nothing is computed for {(date is { } missing ? Words.Date(missing) : "any day yet")}.");
+            text.AppendLine(CultureInfo.InvariantCulture, $"{OneLine.Of(known.Name)}: nothing is computed for {(date is { } missing ? Words.Date(missing) : "any day yet")}.");
             AppendDecisions(text, session, known.Id, date);
             return text.ToString();
         }
 
-        text.AppendLine(CultureInfo.InvariantCulture, $"{known.Name}, {Words.Date(day.Date)}: {Words.Of(day.State)}{(day.StateSource is { } source ? $" ({source})" : "")}");
+        text.AppendLine(CultureInfo.InvariantCulture, $"{OneLine.Of(known.Name)}, {Words.Date(day.Date)}: {Words.Of(day.State)}{(day.StateSource is { } source ? $" ({source})" : "")}");
         AppendDecisions(text, session, known.Id, day.Date);
         AppendTrends(text, day, configuration.Groups[known.Group].LoadQuantity);
-        foreach (var activity in session.Activities.OfPerson(known.Id, day.Date, day.Date))
+        var recorded = session.Activities.OfPerson(known.Id, day.Date, day.Date).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
+        foreach (var activity in PersonTraining.Of(session, configuration, TableBasis.Of(configuration, session), known).Activities.Where(activity => activity.Date == day.Date))
         {
-            AppendActivity(text, activity);
+            AppendActivity(text, activity, recorded.GetValueOrDefault(activity.Key));
         }
 
         foreach (var finding in session.Findings.OfPerson(known.Id, day.Date, day.Date))
         {
             text.AppendLine();
-            text.AppendLine(CultureInfo.InvariantCulture, $"finding {finding.Rule}: {finding.Text}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"finding {finding.Rule}: {OneLine.Of(finding.Text)}");
             AlertExplanation.Append(text, finding.Evidence);
         }
 
@@ -92,30 +96,34 @@ public static class DayExplanation
         }
     }
 
-    private static void AppendActivity(StringBuilder text, StoredActivity activity)
+    private static void AppendActivity(StringBuilder text, JoinedActivity activity, StoredActivity? recorded)
     {
         text.AppendLine();
-        text.AppendLine(CultureInfo.InvariantCulture, $"session {Words.Start(activity.Winner.Start.WithOffset(activity.Winner.LocalOffset))} {activity.Winner.Sport}, by {activity.Winner.Source}");
-        foreach (var quantity in activity.Values.Quantities)
+        var start = recorded is { Winner: { } winner } ? Words.Start(winner.Start.WithOffset(winner.LocalOffset)) : "of no recording";
+        text.AppendLine(CultureInfo.InvariantCulture, $"session {start} {OneLine.Of(activity.Sport.ToString())}, by {OneLine.Of(string.Join(" and ", activity.Sources))}{(activity.AddsLoad ? "" : ", its load not added")}");
+        foreach (var quantity in activity.Quantities)
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"    {quantity.Name} = {quantity.Value:0.###} {quantity.Unit}{(quantity.Estimated ? " (estimated)" : "")}");
         }
 
-        foreach (var stimulus in activity.Values.Stimulus)
+        foreach (var stimulus in activity.Stimulus)
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"    {BodyRegions.Word(stimulus.Region)} from {stimulus.Channel}, grade {stimulus.Grade}: hard bouts {OfBand(stimulus.HardBouts)}, hard repetitions {OfBand(stimulus.HardRepetitions)}, seconds of the slow class {OfBand(stimulus.SlowSeconds)}, medium {OfBand(stimulus.MediumSeconds)}, largest {OfBand(stimulus.LargeSeconds)}");
             foreach (var missing in stimulus.NotSeen)
             {
-                text.AppendLine(CultureInfo.InvariantCulture, $"        not seen: {missing}");
+                text.AppendLine(CultureInfo.InvariantCulture, $"        not seen: {OneLine.Of(missing)}");
             }
         }
 
-        foreach (var remark in activity.Values.Remarks)
+        foreach (var remark in activity.Remarks)
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    {remark}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {OneLine.Of(remark)}");
         }
 
-        text.AppendLine(CultureInfo.InvariantCulture, $"    recordings: {string.Join(", ", activity.RecordingKeys.Select(key => key[..12] + key[64..]))}");
+        if (recorded is not null)
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"    recordings: {string.Join(", ", recorded.RecordingKeys.Select(key => key[..12] + key[64..]))}");
+        }
     }
 
     private static void Line(StringBuilder text, string name, double? value) =>

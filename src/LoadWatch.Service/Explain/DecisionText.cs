@@ -1,3 +1,4 @@
+using LoadWatch.Notices;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage.Decisions;
 
@@ -13,9 +14,9 @@ public static class DecisionText
     /// <summary><c> 2026-03-31T06:30:00Z by NAME: NOTE</c>, without what was not said.</summary>
     public static string Circumstances(Decision decision)
     {
-        var by = decision.By is { } name ? $" by {name}" : "";
-        var table = decision.Via is { } via ? $" in {via.Split('|')[1]}" : "";
-        var note = decision.Note is { } words ? $": {words}" : "";
+        var by = decision.By is { } name ? $" by {OneLine.Of(name)}" : "";
+        var table = decision.Via is { } via ? $" in {OneLine.Of(via.Split('|')[1])}" : "";
+        var note = decision.Note is { } words ? $": {OneLine.Of(words)}" : "";
         return $" {Words.Utc(decision.Made)}{by}{table}{note}";
     }
 

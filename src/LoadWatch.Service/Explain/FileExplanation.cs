@@ -1,5 +1,6 @@
 using System.Globalization;
 using System.Text;
+using LoadWatch.Notices;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
@@ -22,10 +23,10 @@ public static class FileExplanation
     {
         var text = new StringBuilder();
         text.AppendLine(CultureInfo.InvariantCulture, $"{arrival.Sha}  {arrival.Kind ?? "not decoded yet"}, {arrival.Size} bytes");
-        text.AppendLine(CultureInfo.InvariantCulture, $"    {Words.Of(arrival.State)}{(arrival.Reason is { } reason ? $": {reason}" : "")}");
+        text.AppendLine(CultureInfo.InvariantCulture, $"    {Words.Of(arrival.State)}{(arrival.Reason is { } reason ? $": {OneLine.Of(reason)}" : "")}");
         foreach (var sighting in session.Sightings.Of(arrival.Sha))
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    seen as {sighting.Path} in {sighting.Inbox}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    seen as {OneLine.Of(sighting.Path)} in {OneLine.Of(sighting.Inbox)}");
         }
 
         if (arrival.ParentSha is { } parent)

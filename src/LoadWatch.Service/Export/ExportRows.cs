@@ -30,7 +30,8 @@ public sealed record StimulusLine(
 
 public sealed record ActivityLine(
     string Person,
-    string Start,
+    string Date,
+    string? Start,
     string Sport,
     double? ElapsedS,
     double? TimerS,
@@ -44,6 +45,8 @@ public sealed record ActivityLine(
     IReadOnlyDictionary<string, double> UsableShare,
     IReadOnlyList<StimulusLine> Stimulus,
     IReadOnlyList<RecordingLine> Recordings,
+    IReadOnlyList<string> Tables,
+    bool AddsLoad,
     IReadOnlyList<string> Remarks);
 
 public sealed record DayLine(

@@ -1,10 +1,12 @@
-using System.Text.Json;
+using LoadWatch.Activities;
 using LoadWatch.Alerts;
 using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.Loads;
+using LoadWatch.People;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Configuration;
+using LoadWatch.Service.Pipeline;
 using LoadWatch.Stimulus;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Activities;
@@ -18,6 +20,8 @@ namespace LoadWatch.Service.Export;
 /// <param name="to">Last date, or null.</param>
 public sealed class Exporter(WorkingConfiguration configuration, StoreSession session, string? person, LocalDate? from, LocalDate? to)
 {
+    private TableBasis? basis;
+
     /// <summary>What can be exported.</summary>
     public static IReadOnlyList<string> Tables { get; } = ["arrivals", "activities", "days", "findings", "alerts"];
 
@@ -28,7 +32,7 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
     {
         foreach (var line in lines)
         {
-            output.Write(JsonSerializer.Serialize(line, line.GetType(), Words.Json));
+            output.Write(Words.Line(line));
             output.Write('\n');
         }
     }
@@ -37,7 +41,7 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
     {
         "arrivals" => session.Arrivals.All().Where(arrival => person is null || arrival.Person == person).Select(arrival => new ArrivalLine(
             arrival.Sha, FileOf(arrival.Sha), arrival.Kind, Words.Of(arrival.State), arrival.Reason, arrival.Person)),
-        "activities" => ByPerson(id => session.Activities.OfPerson(id, from, to)).Select(Activity),
+        "activities" => ByPerson(Activities),
         "days" => ByPerson(id => session.Days.OfPerson(id, from, to)).Select(OfDay),
         "findings" => ByPerson(id => session.Findings.OfPerson(id, from, to)).Select(OfFinding),
         "alerts" => ByPerson(id => session.Alerts.All(id)).Where(alert => InRange(alert.Raised)).Select(OfAlert),
@@ -54,26 +58,40 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
 
     private string FileOf(string sha) => session.Sightings.Of(sha) is [var first, ..] ? first.Path : "";
 
-    private ActivityLine Activity(StoredActivity activity)
+    private IEnumerable<ActivityLine> Activities(string id)
     {
-        var values = activity.Values;
+        var person = configuration.People[id];
+        var recorded = session.Activities.OfPerson(id, from, to).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
+        basis ??= TableBasis.Of(configuration, session);
+        return PersonTraining.Of(session, configuration, basis, person).Activities
+            .Where(activity => InRange(activity.Date))
+            .Select(activity => Activity(person, activity, recorded.GetValueOrDefault(activity.Key)));
+    }
+
+    /// <param name="recorded">What was recorded of it; null where rows of tables stand for the session alone.</param>
+    private ActivityLine Activity(Person person, JoinedActivity activity, StoredActivity? recorded)
+    {
+        var values = recorded?.Values ?? new ActivityValues();
         return new ActivityLine(
-            activity.Winner.Person,
-            Words.Start(activity.Winner.Start.WithOffset(activity.Winner.LocalOffset)),
-            activity.Winner.Sport.ToString(),
-            activity.Winner.ElapsedSeconds,
-            activity.Winner.TimerSeconds,
-            values.Quantities.Select(quantity => new QuantityLine(quantity.Name, quantity.Value, quantity.Unit, quantity.Estimated)).ToList(),
-            configuration.Groups[configuration.People[activity.Winner.Person].Group].LoadQuantity,
+            person.Id,
+            Words.Date(activity.Date),
+            activity.Start is { } start ? Words.Start(start.WithOffset(recorded?.Winner.LocalOffset ?? person.Zone.GetUtcOffset(start))) : null,
+            activity.Sport.ToString(),
+            recorded?.Winner.ElapsedSeconds,
+            recorded?.Winner.TimerSeconds,
+            activity.Quantities.Select(quantity => new QuantityLine(quantity.Name, quantity.Value, quantity.Unit, quantity.Estimated)).ToList(),
+            configuration.Groups[person.Group].LoadQuantity,
             TimesInZone(values.TimesInZone),
             values.HeartRateMeanBpm,
             values.HeartRateMaxBpm,
             values.PowerMeanWatts,
             values.PowerMaxWatts,
-            values.UsableShare.OrderBy(pair => pair.Key).ToDictionary(pair => Words.Channel(pair.Key), pair => pair.Value, StringComparer.Ordinal),
-            values.Stimulus.Select(OfStimulus).ToList(),
-            activity.RecordingKeys.Select(OfRecording).ToList(),
-            values.Remarks);
+            activity.UsableShare.OrderBy(pair => pair.Key).ToDictionary(pair => Words.Channel(pair.Key), pair => pair.Value, StringComparer.Ordinal),
+            activity.Stimulus.Select(OfStimulus).ToList(),
+            recorded?.RecordingKeys.Select(OfRecording).ToList() ?? [],
+            activity.Tables,
+            activity.AddsLoad,
+            activity.Remarks);
     }
 
     private RecordingLine OfRecording(string key)

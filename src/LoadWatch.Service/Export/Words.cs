@@ -1,3 +1,4 @@
+using System.Globalization;
 using System.Text.Encodings.Web;
 using System.Text.Json;
 using LoadWatch.Recordings;
@@ -15,6 +16,13 @@ public static class Words
         Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping,
     };
 
+    /// <summary>One line of JSON. What would turn the reading direction or show nothing stands as an escape, so a terminal shows it as it is.</summary>
+    public static string Line(object value)
+    {
+        var json = JsonSerializer.Serialize(value, value.GetType(), Json);
+        return json.All(IsPlain) ? json : string.Concat(json.Select(letter => IsPlain(letter) ? letter.ToString() : $"\\u{(int)letter:x4}"));
+    }
+
     /// <summary>ISO 8601 with offset.</summary>
     public static string Start(OffsetDateTime start) => OffsetDateTimePattern.Rfc3339.Format(start);
 
@@ -29,6 +37,10 @@ public static class Words
     public static string Of<T>(T value)
         where T : struct, Enum =>
         JsonNamingPolicy.SnakeCaseLower.ConvertName(value.ToString());
+
+    /// <summary>Such characters can only stand inside a string of the JSON, where their escape means the same.</summary>
+    private static bool IsPlain(char letter) =>
+        !char.IsControl(letter) && CharUnicodeInfo.GetUnicodeCategory(letter) is not (UnicodeCategory.Format or UnicodeCategory.LineSeparator or UnicodeCategory.ParagraphSeparator);
 
     public static string Unit(Channel channel) => channel switch
     {

@@ -34,14 +34,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         }
 
         var brief = Build(session, contact, date);
-        var notice = new Notice(
-            NoticePolicy.BriefKey(contact, brief.Date),
-            contact.Id,
-            brief.Date,
-            BriefText.Subject(brief),
-            BriefText.Write(brief),
-            PageRenderer.Render(brief),
-            NoticeReason.BriefDue);
+        var notice = Write(contact, brief, NoticePolicy.BriefKey(contact, brief.Date), BriefText.Subject(brief), NoticeReason.BriefDue);
         var flagged = brief.DataUpTo is null ? null : Flagged(session, contact);
         return Freeze(session, notice with { Flagged = flagged }, Ways(contact));
     }
@@ -64,15 +57,20 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
 
         var built = Build(session, contact);
         var brief = built with { FirstLine = $"{FlaggedList.ChangeInWords(told, standing)} {built.FirstLine}" };
-        var notice = new Notice(
-            NoticePolicy.UpdateKey(contact, date),
-            contact.Id,
-            date,
-            BriefText.UpdateSubject(brief),
-            BriefText.Write(brief),
-            PageRenderer.Render(brief),
-            NoticeReason.ListChanged);
+        var notice = Write(contact, brief, NoticePolicy.UpdateKey(contact, date), BriefText.UpdateSubject(brief), NoticeReason.ListChanged);
         return Freeze(session, notice with { Flagged = standing }, ways);
+    }
+
+    private Notice Write(Contact contact, Brief brief, string key, string subject, NoticeReason reason)
+    {
+        var notice = new Notice(key, contact.Id, brief.Date, subject, BriefText.Write(brief), PageRenderer.Render(brief), reason);
+        if (contact.Names == NamesShown.Full)
+        {
+            return notice;
+        }
+
+        var mailed = MailNames.Of(brief, contact.Names, configuration.People.Values);
+        return notice with { MailText = BriefText.Write(mailed), MailHtml = PageRenderer.Render(mailed) };
     }
 
     private bool Freeze(StoreSession session, Notice notice, IReadOnlyList<Storage.Notices.Delivery> ways) =>
@@ -90,8 +88,13 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         return ways;
     }
 
-    private string Flagged(StoreSession session, Contact contact) =>
-        FlaggedList.Of(configuration.PeopleOf(contact).SelectMany(person => session.Alerts.Open(person.Id)));
+    /// <summary>Of what the contact may be told: an alert that is not for them changes no list of theirs.</summary>
+    private string Flagged(StoreSession session, Contact contact)
+    {
+        var people = configuration.PeopleOf(contact).ToList();
+        var view = RoleView.Of(contact.Role, people.Count);
+        return FlaggedList.Of(people.SelectMany(person => session.Alerts.Open(person.Id)).Where(alert => view.ShowsRule(alert.Key.Rule)));
+    }
 
     /// <summary>The contact's brief as of now, due or not.</summary>
     public Brief Build(StoreSession session, Contact contact) => Build(session, contact, now.InZone(contact.Zone).Date);

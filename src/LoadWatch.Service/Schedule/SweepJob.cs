@@ -1,3 +1,4 @@
+using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Commands;
 using LoadWatch.Service.Configuration;
@@ -89,17 +90,17 @@ public sealed class SweepJob(
 
         foreach (var inbox in report.MissingInboxes)
         {
-            LogMessages.InboxMissing(log, inbox);
+            LogMessages.InboxMissing(log, OneLine.Of(inbox));
         }
 
         foreach (var undelivered in report.Undelivered)
         {
-            LogMessages.DeliveryFailed(log, undelivered);
+            LogMessages.DeliveryFailed(log, OneLine.Of(undelivered));
         }
 
         foreach (var given in report.GivenUp)
         {
-            LogMessages.DeliveryGivenUp(log, given);
+            LogMessages.DeliveryGivenUp(log, OneLine.Of(given));
         }
     }
 }

@@ -41,6 +41,10 @@ internal sealed class NoticeRow
 
     public string? Flagged { get; init; }
 
+    public string? MailText { get; init; }
+
+    public string? MailHtml { get; init; }
+
     public static NoticeRow From(Notice notice, long alertPosition) => new()
     {
         Key = notice.Key,
@@ -54,9 +58,17 @@ internal sealed class NoticeRow
         AlertPosition = alertPosition,
         Decided = notice.Decided,
         Flagged = notice.Flagged,
+        MailText = notice.MailText,
+        MailHtml = notice.MailHtml,
     };
 
-    public Notice ToNotice() => new(Key, Contact, Date, Subject, Text, Html, Words<NoticeReason>.Parse(Reason)) { Decided = Decided, Flagged = Flagged };
+    public Notice ToNotice() => new(Key, Contact, Date, Subject, Text, Html, Words<NoticeReason>.Parse(Reason))
+    {
+        Decided = Decided,
+        Flagged = Flagged,
+        MailText = MailText,
+        MailHtml = MailHtml,
+    };
 
     public PendingDelivery ToPending() =>
         new(ToNotice(), new Delivery(Channel, Recipient), Attempts, LastError) { FirstAttempt = FirstAttempt };

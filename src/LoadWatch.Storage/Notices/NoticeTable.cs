@@ -7,11 +7,11 @@ namespace LoadWatch.Storage.Notices;
 /// <summary>Tables <c>notice</c> and <c>delivery</c>: what was told to whom, and by which way it went out (I-7).</summary>
 public sealed class NoticeTable
 {
-    private const string Columns = "key, contact, date, subject, text, html, reason, decided, flagged";
+    private const string Columns = "key, contact, date, subject, text, html, reason, decided, flagged, mail_text, mail_html";
 
     private const string Insert = $"""
         INSERT INTO notice ({Columns}, kind, alert_position)
-        VALUES (@Key, @Contact, @Date, @Subject, @Text, @Html, @Reason, @Decided, @Flagged, @Kind, @AlertPosition)
+        VALUES (@Key, @Contact, @Date, @Subject, @Text, @Html, @Reason, @Decided, @Flagged, @MailText, @MailHtml, @Kind, @AlertPosition)
         ON CONFLICT (key) DO NOTHING
         """;
 

@@ -29,7 +29,7 @@ public sealed class RowTable
     /// <summary>Every row of a table, sorted by kind, date, subject and key.</summary>
     public IReadOnlyList<StoredRow> OfScope(string scope) => Select(SelectOfScope, new { scope });
 
-    /// <summary>A person's rows of a kind in force: of equal keys told by several tables the one seen later. Sorted by date and key.</summary>
+    /// <summary>A person's rows of a kind in force: of equal keys told by several tables, for sessions and sets of one layout, the one seen later. Sorted by date and key.</summary>
     public IReadOnlyList<StoredRow> OfPerson(string person, RowKind kind) =>
         InForce(Select(SelectOfPerson, new { person, kind = Words<RowKind>.Of(kind) }), row => row.Person);
 
@@ -48,12 +48,15 @@ public sealed class RowTable
     private static List<StoredRow> InForce(List<StoredRow> rows, Func<StoredRow, string?> owner) =>
     [
         .. rows
-            .GroupBy(row => (Owner: owner(row), row.Key))
+            .GroupBy(row => (Owner: owner(row), row.Key, Layout: IsOfItsLayout(row.Kind) ? row.Layout : ""))
             .Select(same => same.MaxBy(row => (row.Since, row.Scope), Later)!)
             .OrderBy(row => row.Date)
             .ThenBy(row => row.Subject, StringComparer.Ordinal)
             .ThenBy(row => row.Key, StringComparer.Ordinal),
     ];
+
+    /// <summary>A rating and a tracking row of the first session of a date tell different things of it; two plans or answers of one key do not.</summary>
+    private static bool IsOfItsLayout(RowKind kind) => kind is RowKind.Sessions or RowKind.Sets;
 
     private static Comparer<(Instant Since, string Scope)> Later { get; } = Comparer<(Instant Since, string Scope)>.Create((a, b) =>
         a.Since.CompareTo(b.Since) is var apart and not 0 ? apart : string.CompareOrdinal(a.Scope, b.Scope));

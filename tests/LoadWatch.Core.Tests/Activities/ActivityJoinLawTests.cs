@@ -1,4 +1,3 @@
-using System.Globalization;
 using CsCheck;
 using LoadWatch.Rows;
 using NodaTime;
@@ -100,9 +99,11 @@ public class ActivityJoinLawTests
         .. result.Questions.Where(one => date is null || one.Date == date).Select(one => $"{one.Date} {one.Sentence}"),
         .. date is null ? result.UnknownExercises : []]);
 
-    private static string Text(JoinedActivity one) => string.Create(
-        CultureInfo.InvariantCulture,
-        $"{one.Key} {one.Date} {one.Start} {one.Sport} {one.AddsLoad} {List(one.Sources)} {List(one.Tables)} {List(one.Quantities)} {List(one.Stimulus.Select(region => region with { NotSeen = [] }))} {List(one.Stimulus.SelectMany(region => region.NotSeen))} {List(one.Remarks)}");
-
-    private static string List<T>(IEnumerable<T> items) => string.Join(", ", items);
+    private static string Text(JoinedActivity one) => string.Join(
+        ", ",
+        [
+            one.Key, one.Date, one.Start, one.Sport, one.AddsLoad,
+            .. one.Sources, .. one.Tables, .. one.Quantities, .. one.Remarks,
+            .. one.Stimulus.Select(region => region with { NotSeen = [] }), .. one.Stimulus.SelectMany(region => region.NotSeen),
+        ]);
 }

@@ -159,7 +159,9 @@ public class ActivityJoinTests
     {
         var activities = Join([Morning], Session(rating: 5, start: new LocalTime(9, 0)), Session(minutes: 30, rating: 8)).Activities;
 
-        Assert.Equal([(Morning.Winner.Key, 5.0), ("rows/2026-03-10/ratings/1", 8.0)], activities.Select(activity => (activity.Key, activity["rating"]!.Value)));
+        Assert.Equal(
+            [(Morning.Winner.Key, 5.0), ("rows/2026-03-10/ratings/1", 8.0)],
+            activities.Select(activity => (activity.Key, activity["rating"]!.Value)));
     }
 
     [Fact]

@@ -71,7 +71,10 @@ public class SetLogTests
     [Fact]
     public void ARegionThatPowerSawStays()
     {
-        var own = Recorded("generic", 18).With(Region("power", Grade.B, 4, null), Region("power", Grade.B, 1, null, BodyRegion.Arms), Region("heart_rate", Grade.E, null, null, BodyRegion.Trunk));
+        var own = Recorded("generic", 18).With(
+            Region("power", Grade.B, 4, null),
+            Region("heart_rate", Grade.E, null, null, BodyRegion.Trunk),
+            Region("power", Grade.B, 1, null, BodyRegion.Arms));
         var activity = Assert.Single(Join([own], HeavySquats).Activities);
 
         Assert.Equal([(BodyRegion.Legs, "sets"), (BodyRegion.Arms, "power")], activity.Stimulus.Select(region => (region.Region, region.Channel)));

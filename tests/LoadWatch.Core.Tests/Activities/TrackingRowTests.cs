@@ -104,8 +104,8 @@ public class TrackingRowTests
     {
         var activity = Assert.Single(Join(
             [],
-            Session("pods", drill: "a", minutes: 20, quantities: [Distance(double.MaxValue), new("heart_rate", 150, "bpm", false), new("effort", double.NaN, "AU", false)]),
-            Session("pods", drill: "b", start: null, quantities: [Distance(double.MaxValue), new("heart_rate", 160, "bpm", false)])).Activities);
+            Session("pods", drill: "a", minutes: 20, quantities: [Distance(double.MaxValue), new("effort", double.NaN, "AU", Estimated: false)]),
+            Session("pods", drill: "b", quantities: Distance(double.MaxValue))).Activities);
 
         Assert.Equal([Minutes(20)], activity.Quantities);
     }

@@ -1,3 +1,5 @@
+using LoadWatch.Recordings;
+
 namespace LoadWatch.Loads;
 
 public class SetTotalsTests
@@ -19,6 +21,28 @@ public class SetTotalsTests
 
         Assert.Equal(["sets", "repetitions"], quantities.Select(one => one.Name));
         Assert.Equal("of 2 working sets 1 without repetitions, 1 without kilograms: the totals are of the others", remark);
+    }
+
+    [Fact]
+    public void AHoldAndBodyWeightLackNothing()
+    {
+        var hold = Given.Set("plank", null, null) with { IsHold = true };
+        var body = Given.Set("chair_stand", 12, null) with { Load = SetLoad.BodyWeight };
+
+        var (quantities, remark) = SetTotals.Of([hold, body, Given.Set("squat", 5, 20)]);
+
+        Assert.Equal([("sets", 3.0), ("repetitions", 17.0), ("kilograms", 100.0)], quantities.Select(one => (one.Name, one.Value)));
+        Assert.Null(remark);
+    }
+
+    [Fact]
+    public void AHoldBesideASetWithoutRepetitionsDoesNotHideIt()
+    {
+        var hold = Given.Set("plank", null, null) with { IsHold = true };
+
+        var (_, remark) = SetTotals.Of([hold, Given.Set("squat", null, 20), Given.Set("row", 5, null) with { Load = SetLoad.Band }]);
+
+        Assert.Equal("of 3 working sets 1 without repetitions, 1 without kilograms: the totals are of the others", remark);
     }
 
     [Fact]

@@ -11,6 +11,8 @@ public sealed class OneLineTests
     [InlineData("a\u202Eb\u2066c\uFEFF", "a b c")]
     [InlineData("a\u2028b\u0085c", "a b c")]
     [InlineData("\t", "")]
+    [InlineData("A\u200Bn\u2060n\u00AD", "Ann")]
+    [InlineData("\u06CC\u200C\u06A9", "\u06CC\u200C\u06A9")] // Persian parts its letters by a joiner.
     public void NothingInANameStartsALineOrTurnsIt(string name, string expected) => Assert.Equal(expected, OneLine.Of(name));
 
     [Fact]

@@ -32,4 +32,35 @@ public class AnchorBookTests
         Assert.Equal(950, book.Since(Given.Date.PlusDays(-183), Given.Date, "p1", AnchorKind.PowerMax)!.Value);
         Assert.Null(book.Since(Given.Date.PlusDays(-5), Given.Date, "p1", AnchorKind.PowerMax));
     }
+
+    [Fact]
+    public void TheMaximumOfAMachineGoesBeforeThatOfTheExercise()
+    {
+        var free = Given.Anchor(AnchorKind.OneRepetitionMax, 90, Given.Date, exercise: "leg_press");
+        var book = Given.Anchors(free, free with { Value = 140, Machine = "Press 2", Source = AnchorSource.Estimated });
+
+        Assert.Equal(140, Maximum(book, "press-2"));
+        Assert.Equal(90, Maximum(book, "press 3"));
+        Assert.Equal(90, Maximum(book, null));
+    }
+
+    [Fact]
+    public void TheMaximumOfAnotherMachineNeverCounts()
+    {
+        var book = Given.Anchors(Given.Anchor(AnchorKind.OneRepetitionMax, 140, Given.Date, exercise: "leg_press") with { Machine = "Press 2" });
+
+        Assert.Null(Maximum(book, "press 3"));
+        Assert.Null(Maximum(book, null));
+    }
+
+    [Fact]
+    public void BeforeTheMachinesOwnMaximumHoldsThatOfTheExercise()
+    {
+        var free = Given.Anchor(AnchorKind.OneRepetitionMax, 90, exercise: "leg_press");
+
+        Assert.Equal(90, Maximum(Given.Anchors(free, free with { Value = 140, Machine = "Press 2", Date = Given.Date.PlusDays(1) }), "press 2"));
+    }
+
+    private static double? Maximum(AnchorBook book, string? machine) =>
+        book.On(Given.Date, "p1", AnchorKind.OneRepetitionMax, "Leg Press", machine)?.Value;
 }

@@ -148,6 +148,40 @@ public class SessionStimulusTests
     }
 
     [Fact]
+    public void AnExerciseIsFoundHoweverItIsWritten()
+    {
+        var stimulus = OfSets([], Given.Set("Leg  Press", 8, 80, 2), Given.Set("leg-press", 8, 80, 2), Given.Set("CHEST_PRESS", 8, 80));
+
+        Assert.Equal([BodyRegion.Legs, BodyRegion.Arms], stimulus.Regions.Select(region => region.Region));
+        Assert.Equal(16, stimulus.Regions[0].HardRepetitions!.Value.Mid);
+        Assert.Equal("1 set of chest_press: no one_repetition_max, or repetitions in reserve up to 12 in all", Assert.Single(stimulus.Regions[1].NotSeen));
+        Assert.Empty(stimulus.Questions);
+    }
+
+    [Fact]
+    public void ExercisesWithoutARegionAreAskedForOnce()
+    {
+        var stimulus = OfSets([], Given.Set("Turkish walk", 8, 80), Given.Set("squat", 8, 80), Given.Set(null, 8, 80), Given.Set("turkish-walk", 8, 80),
+            Given.Set("arm bike", 8, 80), Given.Set("resting", null, null, active: false));
+
+        Assert.Equal(["arm_bike", "turkish_walk"], stimulus.Questions);
+        Assert.Contains("2 sets of turkish_walk: which body region?", stimulus.Remarks);
+        Assert.Equal(3, stimulus.Remarks.Count);
+    }
+
+    [Fact]
+    public void AMixedSessionAddsRepetitionsAndHoldsOfARegion()
+    {
+        var wallSit = Given.Set("wall_sit", null, null) with { IsHold = true, DurationSeconds = 40, Hardness = 8 };
+        var jumps = Given.Set("squat_jump", 5, null) with { IsFast = true };
+
+        var legs = Assert.Single(OfSets([], wallSit, jumps, Given.Set("leg_press", 6, 80, 2)).Regions);
+
+        Assert.Equal((1.0, 11.0, 3), (legs.HardBouts!.Value.Mid, legs.HardRepetitions!.Value.Mid, legs.HardSets));
+        Assert.Equal(Grade.D, legs.Grade);
+    }
+
+    [Fact]
     public void BandsAndClassesAreAlwaysOrdered() =>
         Gen.Double[0, 1500].Array[2, 200].Sample(watts =>
         {

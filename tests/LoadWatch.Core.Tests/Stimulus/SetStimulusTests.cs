@@ -77,9 +77,9 @@ public class SetStimulusTests
     [Fact]
     public void WithoutAMaximumTheChartNamesTheLoad()
     {
-        Assert.Equal(new SetDemand(8, 0.75, 0.10, 2, Grade.B), Demand(Given.Set("squat", 8, 80, 2)));
-        Assert.Equal(new SetDemand(8, 0.75, 0.20, 2, Grade.D), Demand(Given.Set("squat", 8, null, 2)));
-        Assert.Equal(new SetDemand(8, 0.75, 0.20, 2, Grade.D), Demand(Given.Set("squat", 8, 0, 2), Maximum));
+        Assert.Equal(new SetDemand(8, 0.75, 0.10, 2, Grade.B, SetRule.Chart), Demand(Given.Set("squat", 8, 80, 2)));
+        Assert.Equal(new SetDemand(8, 0.75, 0.20, 2, Grade.D, SetRule.Chart), Demand(Given.Set("squat", 8, null, 2)));
+        Assert.Equal(new SetDemand(8, 0.75, 0.20, 2, Grade.D, SetRule.Chart), Demand(Given.Set("squat", 8, 0, 2), Maximum));
     }
 
     [Theory]

@@ -29,6 +29,14 @@ public sealed class MailMessageWriterTests
         Assert.NotEqual(Bytes(Notice, "ada@example.org"), Bytes(Notice, "ben@example.org"));
     }
 
+    [Fact]
+    public void WhatMayLeaveTheMachineIsWhatIsMailed()
+    {
+        var message = Message(Notice with { MailText = "H. L.\n", MailHtml = "<p>H. L.</p>\n" }, "ada@example.org");
+
+        Assert.Equal(("H. L.\n", "<p>H. L.</p>\n"), (message.TextBody?.ReplaceLineEndings("\n"), message.HtmlBody?.ReplaceLineEndings("\n")));
+    }
+
     // First 32 digits of: printf 'ada|brief|2026-03-01\nada@example.org' | sha256sum
     [Fact]
     public void TheMessageIdNamesNoticeAndRecipient()

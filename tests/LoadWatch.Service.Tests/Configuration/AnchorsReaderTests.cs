@@ -5,7 +5,7 @@ namespace LoadWatch.Service.Tests.Configuration;
 
 public sealed class AnchorsReaderTests
 {
-    private const string Header = "person,date,anchor,value,unit,source,exercise\n";
+    private const string Header = "person,date,anchor,value,unit,source,exercise,machine\n";
 
     [Theory]
     [InlineData("anne,,body_mass,70,kg,,", """person: "anne" is not in the roster; did you mean "anna"?""")]
@@ -23,6 +23,7 @@ public sealed class AnchorsReaderTests
     [InlineData("anna,,one_repetition_max,90,kg,,", """exercise: "" is not an exercise with a known body region""")]
     [InlineData("anna,,one_repetition_max,90,kg,,leg_pres", """exercise: "leg_pres" is not an exercise with a known body region; did you mean "leg_press"?""")]
     [InlineData("anna,,body_mass,70,kg,,squat", "exercise: only one_repetition_max has an exercise, not body_mass")]
+    [InlineData("anna,,body_mass,70,kg,,,scale 2", "machine: only one_repetition_max has a machine, not body_mass")]
     public void AMistakeInARowIsToldWithItsLine(string row, string fault) =>
         Assert.Equal([$"anchors.csv:3: {fault}"], ConfigurationFolder.FaultsWith("anchors.csv", $"{Header}ben,,body_mass,70,kg,,\n{row}\n"));
 
@@ -81,4 +82,21 @@ public sealed class AnchorsReaderTests
 
         Assert.Equal(60, folder.Read().Anchors.On(new LocalDate(2026, 1, 1), "anna", AnchorKind.OneRepetitionMax, "step_up")!.Value);
     }
+
+    [Fact]
+    public void AMaximumIsKeptByExerciseAndMachineHoweverTheyAreWritten()
+    {
+        var book = ConfigurationFolder.With(
+            "anchors.csv", $"{Header}anna,,one_repetition_max,90,kg,,Leg Press,\nanna,,one_repetition_max,140,kg,,leg-press,Press 2\n").Anchors;
+
+        var maxima = new[] { null, "press 2", "press 3" }.Select(machine =>
+            book.On(new LocalDate(2026, 1, 1), "anna", AnchorKind.OneRepetitionMax, "leg_press", machine)!.Value);
+        Assert.Equal([90, 140, 90], maxima);
+    }
+
+    [Fact]
+    public void ATableWithoutTheColumnOfMachinesIsReadAsBefore() => Assert.Equal(
+        90,
+        ConfigurationFolder.With("anchors.csv", "person,anchor,value,unit,exercise\nanna,one_repetition_max,90,kg,squat\n").Anchors
+            .On(new LocalDate(2026, 1, 1), "anna", AnchorKind.OneRepetitionMax, "squat")!.Value);
 }

@@ -1,5 +1,6 @@
 using System.Text;
 using LoadWatch.Findings;
+using LoadWatch.Stimulus;
 using NodaTime;
 
 namespace LoadWatch.Service.Tests.Configuration;
@@ -68,6 +69,23 @@ public sealed class ConfigurationReaderTests
         var words = new[] { "squat", "step_up", "plank" }.Select(word => $"{word}: {string.Join(" ", read.Computation.Exercises[word])}");
         Assert.Equal(["squat: Legs Trunk", "step_up: Legs", "plank: Trunk"], words);
     }
+
+    [Fact]
+    public void AnExerciseMayBeWrittenInAnyCaseAndWithBlanks()
+    {
+        var read = ConfigurationFolder.With("loadwatch.json", """{ "computation": { "exercises": { "Leg Press": ["legs", "trunk"] } } }""");
+
+        Assert.Equal([BodyRegion.Legs, BodyRegion.Trunk], read.Computation.Exercises["leg_press"]);
+        Assert.DoesNotContain("Leg Press", read.Computation.Exercises.Keys);
+    }
+
+    [Theory]
+    [InlineData("""{ "Step-Up": ["legs"], "step up": ["arms"] }""", "\"step_up\" stands above already, written otherwise")]
+    [InlineData("""{ " - ": ["legs"] }""", "\" - \" holds no letter")]
+    public void AnExerciseThatStandsTwiceOrIsNoWordIsTold(string exercises, string fault) => Assert.EndsWith(
+        fault,
+        Assert.Single(ConfigurationFolder.FaultsWith("loadwatch.json", $$"""{ "computation": { "exercises": {{exercises}} } }""")),
+        StringComparison.Ordinal);
 
     [Fact]
     public void ATableInAnotherEncodingGivesAnotherVersionForAnotherLetter()

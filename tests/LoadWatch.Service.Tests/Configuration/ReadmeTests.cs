@@ -113,6 +113,7 @@ public sealed class ReadmeTests
             .Concat(DefaultRegions.Sports.Keys)
             .Concat(Enum.GetValues<Channel>().Select(Words.Channel))
             .Concat(ValueCheck.WordsOf(typeof(ContactRole)))
+            .Concat(ValueCheck.WordsOf(typeof(NamesShown)))
             .Concat(ValueCheck.WordsOf(typeof(AnchorSource)))
             .Concat(ValueCheck.WordsOf(typeof(ArrivalState)))
             .Concat(ValueCheck.WordsOf(typeof(TakeMode)));

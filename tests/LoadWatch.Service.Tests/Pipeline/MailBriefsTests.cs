@@ -1,4 +1,6 @@
 using LoadWatch.Alerts;
+using LoadWatch.Delivery.Mail;
+using LoadWatch.Findings;
 using LoadWatch.Notices;
 using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
@@ -30,6 +32,50 @@ public sealed class MailBriefsTests : IDisposable
         Assert.Equal(["log", "mail", "page"], Pending().Select(pending => pending.Delivery.Channel));
         Assert.All(Pending(), pending => Assert.Equal(Morning, pending.Notice.Decided));
         Assert.Contains(Pending(), pending => pending.Delivery == Mail);
+    }
+
+    [Theory]
+    [InlineData("initials", "- A. (warning)")]
+    [InlineData("none", "The page has the rest.")]
+    public void WhatLeavesTheMachineHoldsTheNamesThatTheContactAsksFor(string names, string expected)
+    {
+        using var discreet = new MailWorkplace(contact: $", \"names\": \"{names}\"");
+        Raise("ann");
+
+        Decide(Morning, discreet);
+        Raise("ben");
+        Decide(Morning + Duration.FromHours(2), discreet);
+
+        var mails = Pending().Where(pending => pending.Delivery == Mail).Select(pending => MailMessageWriter.Write(pending.Notice, "ada@example.org", "brief@example.org")).ToList();
+        Assert.Equal(2, mails.Count);
+        Assert.All(mails, mail => Assert.Contains(expected, mail.TextBody, StringComparison.Ordinal));
+        Assert.All(mails, mail => Assert.DoesNotMatch("(?i)\\b(ann|ben)\\b", mail.TextBody + mail.HtmlBody));
+        Assert.All(Pending(), pending => Assert.Contains("- Ann (warning)", pending.Notice.Text, StringComparison.Ordinal));
+        Assert.All(Pending(), pending => Assert.Contains("<h3>Ann</h3>", pending.Notice.Html, StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void FullNamesAreKeptOnce()
+    {
+        Decide(Morning);
+
+        Assert.All(Pending(), pending => Assert.Equal((null, null), (pending.Notice.MailText, pending.Notice.MailHtml)));
+    }
+
+    [Theory]
+    [InlineData("coach", 0)]
+    [InlineData("front_desk", 0)]
+    [InlineData("physiotherapist", 0)]
+    [InlineData("clinician", 1)]
+    public void ATestOfFunctionChangesOnlyTheListOfTheClinician(string role, int updates)
+    {
+        using var desk = new MailWorkplace(contact: $", \"role\": \"{role}\"");
+        Decide(Morning, desk);
+
+        var test = MorningExamples.News("ann", RoleView.FunctionTest, null, Severity.Notice, AlertState.Unacknowledged, "chair stand fell", isNew: true);
+        store.Write(session => session.Alerts.Put(test.Alert));
+
+        Assert.Equal(updates, Decide(Morning + Duration.FromHours(2), desk));
     }
 
     [Fact]

@@ -12,7 +12,7 @@ public sealed class NoticeTableTests(SharedFolder shared) : StoreTest(shared)
     [Fact]
     public void ANoticeIsReadAsItWasDecided()
     {
-        var notice = Some.Notice("coach", Some.Date);
+        var notice = Some.Notice("coach", Some.Date) with { MailText = "A. K.", MailHtml = "<p>A. K.</p>" };
         Assert.True(Add(notice));
 
         Assert.Equal(notice, Store.Read(session => session.Notices.Get(notice.Key)));

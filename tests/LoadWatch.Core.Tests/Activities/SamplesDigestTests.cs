@@ -1,0 +1,34 @@
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Activities;
+
+public class SamplesDigestTests
+{
+    private static readonly StrengthSet Plain = Given.Set("squat", 8, 80, 2);
+
+    /// <summary>Computed independently from the published basis and prime over the set's seven fields; recordings from before set logs keep it.</summary>
+    [Fact]
+    public void ASetOfADeviceKeepsItsDigest() => Assert.Equal(-5813918278509877966, Of(Plain));
+
+    [Fact]
+    public void WhateverASetLogSaysMakesAnotherDigest()
+    {
+        StrengthSet[] sets =
+        [
+            Plain,
+            Plain with { Machine = "2" },
+            Plain with { Hardness = 2 },
+            Plain with { Pin = 2 },
+            Plain with { ConcentricSeconds = 2 },
+            Plain with { Load = SetLoad.Pin },
+            Plain with { Load = SetLoad.BodyWeight },
+            Plain with { Load = SetLoad.Band },
+            Plain with { IsHold = true },
+            Plain with { IsFast = true },
+        ];
+
+        Assert.Equal(sets.Length, sets.Select(Of).Distinct().Count());
+    }
+
+    private static long Of(StrengthSet set) => SamplesDigest.Of(Given.Recording("training", SampleSeries.Empty, set));
+}
