@@ -5,7 +5,7 @@ using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding;
 
-/// <summary>The one way from bytes to recordings: tells what a content is, whether it is whole, and decodes or unpacks it.</summary>
+/// <summary>The one way from bytes to recordings and rows of tables: tells what a content is, whether it is whole, and decodes or unpacks it.</summary>
 /// <param name="layouts">The CSV layouts known, each without reasons from <see cref="CsvLayout.Validate"/>; <see cref="BuiltInLayouts"/>
 /// are not added.</param>
 /// <param name="limits">How much a container may hold; null for the defaults.</param>
@@ -45,11 +45,11 @@ public sealed class DecoderSet(IReadOnlyList<CsvLayout> layouts, ContainerLimits
         _ => Completeness.NeedsSettling,
     };
 
-    /// <summary>Decodes a FIT file or a CSV. Anything else gives no recording and an error.</summary>
+    /// <summary>Decodes a FIT file, or a CSV by the layout that its column names pick. Anything else gives nothing and an error.</summary>
     public DecodedFile Decode(ReadOnlyMemory<byte> bytes) => Recognise(bytes.Span) switch
     {
         ContentKind.Fit => FitDecoder.Decode(bytes),
-        ContentKind.Text => CsvSamplesDecoder.Decode(bytes, layouts),
+        ContentKind.Text => CsvDecoder.Decode(bytes, layouts),
         ContentKind.Gzip => Refused("gzip", "a gzip file is unpacked first"),
         ContentKind.Zip => Refused("zip", "a zip file is unpacked first"),
         _ => Refused("unknown", bytes.IsEmpty ? "the file is empty" : "not a FIT, CSV, gzip or zip file"),

@@ -31,5 +31,5 @@ public class TrackingBenchmarks
     public byte[] Sha256() => SHA256.HashData(file);
 
     [Benchmark]
-    public DecodedFile Decode() => CsvSamplesDecoder.Decode(file, [Layout]);
+    public DecodedFile Decode() => CsvDecoder.Decode(file, [Layout]);
 }

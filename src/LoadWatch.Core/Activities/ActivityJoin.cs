@@ -1,4 +1,5 @@
 using LoadWatch.People;
+using LoadWatch.Recordings;
 using LoadWatch.Rows;
 
 namespace LoadWatch.Activities;
@@ -40,6 +41,8 @@ public static class ActivityJoin
         .Select(row => row.Content)
         .OfType<SetRow>()
         .Select(SetRows.Exercise)
+        .OfType<string>()
+        .Select(ExerciseWord.Canonical)
         .OfType<string>()
         .Where(word => !settings.Exercises.ContainsKey(word))
         .Distinct(StringComparer.Ordinal)

@@ -8,7 +8,7 @@ namespace LoadWatch.Activities;
 /// </summary>
 internal static class DrillTotals
 {
-    private static readonly string[] Apart = ["_share", "_mean", "_per_minute", RatedLoad.Rating];
+    private static readonly string[] Apart = ["_share", "_mean", "_per_minute", QuantityNames.Rating];
     private static readonly string[] UnitsOfNoAmount = ["1", "%", "bpm", "m/s", "m/s2", "m/min", "W", "W/kg"];
 
     /// <summary>Null where the drills cannot be put together.</summary>

@@ -9,7 +9,9 @@ namespace LoadWatch.Activities;
 /// <summary>Makes one activity of everything that tells of a session.</summary>
 internal static class JoinedSession
 {
-    private static readonly string[] OfSets = [QuantityNames.Sets, QuantityNames.Repetitions, QuantityNames.Kilograms];
+    private static bool IsOfSets(string quantity) =>
+        quantity is QuantityNames.Sets or QuantityNames.Repetitions or QuantityNames.Kilograms
+        || quantity.StartsWith(QuantityNames.OneRepetitionMaxOf, StringComparison.Ordinal);
 
     public static (JoinedActivity Activity, JoinQuestion? Question) Of(SessionParts session, Person person, ComputationSettings settings)
     {
@@ -54,16 +56,17 @@ internal static class JoinedSession
     private static QuantityFill Quantities(RecordedActivity? recording, IReadOnlyList<StatedSession> stated, StatedSession? log)
     {
         var fill = new QuantityFill();
-        fill.Add((recording?.Values.Quantities ?? []).Where(one => log is null || !OfSets.Contains(one.Name, StringComparer.Ordinal)), "the recording");
+        fill.Add((recording?.Values.Quantities ?? []).Where(one => log is null || !IsOfSets(one.Name)), "the recording");
         fill.Add(log?.Sets!.Totals ?? [], log?.Layout ?? "");
         foreach (var one in stated)
         {
             fill.Add(one.Quantities, one.Layout);
         }
 
-        if (RatedLoad.Of(fill[RatedLoad.Rating], fill[QuantityNames.Minutes]) is { } rated)
+        var (rating, minutes) = (fill[QuantityNames.Rating], fill[QuantityNames.Minutes]);
+        if (FosterLoad.Of(rating?.Value, minutes?.Value) is { } load)
         {
-            fill.Add([rated], RatedLoad.Rating);
+            fill.Add([new Quantity(QuantityNames.FosterLoad, load, "AU", rating!.Estimated || minutes!.Estimated)], QuantityNames.Rating);
         }
 
         return fill;

@@ -34,7 +34,7 @@ internal sealed class QuantityFill
 
     private static bool IsFarFrom(Quantity one, Quantity other)
     {
-        if (one.Unit != other.Unit || one.Name == RatedLoad.Rating)
+        if (one.Unit != other.Unit || one.Name == QuantityNames.Rating)
         {
             return one.Unit != other.Unit || !one.Value.Equals(other.Value);
         }

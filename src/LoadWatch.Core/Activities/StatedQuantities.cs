@@ -39,7 +39,7 @@ internal static class StatedQuantities
 
         if (row.Rating is >= 0 and <= 10 and var rating)
         {
-            yield return new Quantity(RatedLoad.Rating, rating, RatedLoad.RatingUnit, Estimated: false);
+            yield return new Quantity(QuantityNames.Rating, rating, "points", Estimated: false);
         }
     }
 }

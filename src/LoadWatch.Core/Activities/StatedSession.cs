@@ -37,7 +37,7 @@ internal sealed record StatedSession
     public double? Minutes => Quantities.FirstOrDefault(one => one.Name == QuantityNames.Minutes)?.Value;
 
     /// <summary>Whether it tells enough to count without a recording: sets, content, or any figure but a rating.</summary>
-    public bool StandsAlone => Sets is not null || Content is not null || Quantities.Any(one => one.Name != RatedLoad.Rating);
+    public bool StandsAlone => Sets is not null || Content is not null || Quantities.Any(one => one.Name != QuantityNames.Rating);
 
     /// <summary>A row of a list of names that nobody filled in.</summary>
     public bool IsBlank => !StandsAlone && Quantities.Count == 0;

@@ -21,7 +21,7 @@ public sealed class FallingCapacityRule : IRule
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var limits = subject.Limits.FallingCapacity;
-        if (!limits.Enabled || subject.Days.Count == 0)
+        if (subject.Days.Count == 0)
         {
             return [];
         }

@@ -17,9 +17,8 @@ public sealed class FunctionTestRule : IRule
 
     public bool IsEnabled(RuleLimits limits) => limits.FunctionTest.Enabled;
 
-    public IEnumerable<Finding> Evaluate(RuleSubject subject) => subject.Limits.FunctionTest.Enabled
-        ? FunctionTests.All.SelectMany(test => Evaluate(subject, test)).OrderBy(finding => finding.Date)
-        : [];
+    public IEnumerable<Finding> Evaluate(RuleSubject subject) =>
+        FunctionTests.All.SelectMany(test => Evaluate(subject, test)).OrderBy(finding => finding.Date);
 
     private IEnumerable<Finding> Evaluate(RuleSubject subject, FunctionTest test)
     {

@@ -18,7 +18,7 @@ public sealed class NotUsableRule : IRule
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var limits = subject.Limits.NotUsable;
-        var useless = limits.Enabled ? Useless(subject, limits.UsableShare) : [];
+        var useless = Useless(subject, limits.UsableShare);
         LocalDate? since = null;
         foreach (var day in useless.Count == 0 ? [] : subject.Days)
         {

@@ -12,7 +12,11 @@ public static class RuleBook
         new HardDaysRule(),
         new FallingLoadRule(),
         new StimulusGapRule(),
+        new StimulusLowRule(),
+        new FallingCapacityRule(),
         new SilenceRule(),
+        new NotUsableRule(),
+        new FunctionTestRule(),
     ];
 
     /// <summary>The findings of every date by the rules that are on, sorted by date, name of the rule (ordinal), region and quantity.</summary>

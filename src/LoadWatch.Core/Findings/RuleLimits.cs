@@ -23,14 +23,14 @@ public sealed record RuleLimits
     /// <summary>The usual load is fading.</summary>
     public FallingLoadLimits FallingLoad { get; init; } = new();
 
-    /// <summary>The best of the last weeks below the best before.</summary>
-    public FallingCapacityLimits FallingCapacity { get; init; } = new();
-
     /// <summary>Too long without heavy or fast work of a body region.</summary>
     public StimulusGapLimits StimulusGap { get; init; } = new();
 
     /// <summary>Too few heavy-or-fast days of a body region.</summary>
     public StimulusLowLimits StimulusLow { get; init; } = new();
+
+    /// <summary>The best of the last weeks below the best before.</summary>
+    public FallingCapacityLimits FallingCapacity { get; init; } = new();
 
     /// <summary>Expected recordings did not come.</summary>
     public SilenceLimits Silence { get; init; } = new();

@@ -24,9 +24,8 @@ public sealed class StimulusLowRule : IRule
 
     public bool IsEnabled(RuleLimits limits) => limits.StimulusLow.Enabled;
 
-    public IEnumerable<Finding> Evaluate(RuleSubject subject) => subject.Limits.StimulusLow.Enabled
-        ? Regions.SelectMany(region => Evaluate(subject, region)).OrderBy(finding => finding.Date)
-        : [];
+    public IEnumerable<Finding> Evaluate(RuleSubject subject) =>
+        Regions.SelectMany(region => Evaluate(subject, region)).OrderBy(finding => finding.Date);
 
     private IEnumerable<Finding> Evaluate(RuleSubject subject, BodyRegion region)
     {

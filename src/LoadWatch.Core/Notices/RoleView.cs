@@ -1,3 +1,4 @@
+using LoadWatch.Findings;
 using LoadWatch.People;
 using LoadWatch.Plans;
 
@@ -9,7 +10,7 @@ namespace LoadWatch.Notices;
 public sealed record RoleView
 {
     /// <summary>The rule about tests of function; it is told to clinicians and to the person.</summary>
-    public const string FunctionTest = "function_test";
+    private const string FunctionTest = FunctionTestRule.RuleName;
 
     private readonly ContactRole role;
 

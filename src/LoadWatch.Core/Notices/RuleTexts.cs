@@ -20,7 +20,10 @@ public static class RuleTexts
     private const string HardDays = "hard_days";
     private const string FallingLoad = "falling_load";
     private const string StimulusGap = "stimulus_gap";
+    private const string StimulusLow = "stimulus_low";
+    private const string FallingCapacity = "falling_capacity";
     private const string Silence = "silence";
+    private const string NotUsable = "not_usable";
 
     private static readonly string[] Places = [.. RuleBook.All.Select(rule => rule.Name)];
 
@@ -37,7 +40,11 @@ public static class RuleTexts
         HardDays => "with many hard days or matches close together",
         FallingLoad => $"well below their usual{Measure(key)}",
         StimulusGap => $"without heavy or fast {RegionWork(key.Region)}",
+        StimulusLow => $"with little heavy or fast {RegionWork(key.Region)}",
+        FallingCapacity => "with a best of late below the best before",
         Silence => "silent",
+        NotUsable => "with recordings that cannot be used",
+        FunctionTestRule.RuleName => "with a function test to look at",
         _ => $"with {Words(key.Rule)}",
     };
 
@@ -51,7 +58,11 @@ public static class RuleTexts
         HardDays => "many hard days or matches close together",
         FallingLoad => $"{Load(key)} well below {(self ? "your" : "the")} usual",
         StimulusGap => $"no heavy or fast {RegionWork(key.Region)} lately",
+        StimulusLow => $"little heavy or fast {RegionWork(key.Region)} lately",
+        FallingCapacity => $"{Best(key)} of late below {(self ? "your" : "the")} best before",
         Silence => "expected recordings missing",
+        NotUsable => "recordings that cannot be used",
+        FunctionTestRule.RuleName => $"{Test(key)} beyond a cut-off or down",
         _ => Words(key.Rule),
     };
 
@@ -68,6 +79,11 @@ public static class RuleTexts
             : "asking whether less was meant; if not, going back up in small steps, no catching up.",
         StimulusGap =>
             $"a few heavy or fast {RegionSets(key.Region)}, within what {(self ? "you and your" : "the person and their")} clinician allow; no catching up.",
+        StimulusLow =>
+            $"one more day with a few heavy or fast {RegionSets(key.Region)} a week, within what {(self ? "you and your" : "the person and their")} clinician allow; no catching up.",
+        FallingCapacity => "whether an all-out try was made lately; if so, what else went on, before changing anything.",
+        NotUsable => "a look at strap, sensor and watch: battery, contact, pairing.",
+        FunctionTestRule.RuleName => "testing again under the same conditions, and what it means with a clinician.",
         Silence => self
             ? "a look at strap, watch and upload if you did train: one of them may have failed."
             : "asking whether training went on; a strap, watch or upload may have failed.",
@@ -104,6 +120,10 @@ public static class RuleTexts
         HardDays => "the hard days and matches are further apart again",
         FallingLoad => FormattableString.Invariant($"{Load(key)} is back at {100 * limits.FallingLoad.Return:0.##} % of {(self ? "your" : "the")} usual or above"),
         StimulusGap => $"heavy or fast {RegionWork(key.Region)} is back",
+        StimulusLow => $"heavy or fast {RegionWork(key.Region)} is back to the expected number of days",
+        FallingCapacity => $"{Best(key)} is no longer below the best before",
+        NotUsable => "recordings can be used again",
+        FunctionTestRule.RuleName => $"{Test(key)} is within the cut-off again, or its result has aged",
         Silence => "recordings are coming in again",
         _ => $"{Words(key.Rule)}: back to usual",
     };
@@ -123,6 +143,10 @@ public static class RuleTexts
     private static string By(FindingKey key) => key.Quantity is { } quantity ? $" by {QuantityWords.Of(quantity)}" : "";
 
     private static string OneSession(FindingKey key) => key.Quantity == QuantityNames.Distance ? "one run" : "one session";
+
+    private static string Best(FindingKey key) => key.Quantity is { } quantity ? $"best {QuantityWords.Of(quantity)}" : "best";
+
+    private static string Test(FindingKey key) => FunctionTests.Of(key.Quantity ?? "") is { } test ? test.Name.ToLowerInvariant() : "function test";
 
     private static string RegionWork(BodyRegion? region) => region switch
     {

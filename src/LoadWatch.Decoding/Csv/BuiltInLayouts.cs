@@ -30,4 +30,7 @@ public static class BuiltInLayouts
         Columns = SampleColumns,
         SportColumn = SportColumn,
     };
+
+    /// <summary>All of them: the one above and <see cref="BuiltInTables"/>. No file fits two, unless it mixes their needed columns.</summary>
+    public static IReadOnlyList<CsvLayout> All { get; } = [Samples, .. BuiltInTables.All];
 }

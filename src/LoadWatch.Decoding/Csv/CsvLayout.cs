@@ -8,12 +8,31 @@ public enum CsvKind
 {
     /// <summary>A time series: one row per moment of one session.</summary>
     Samples,
+
+    /// <summary>A table with a row per person and session, or drill of one.</summary>
+    Sessions,
+
+    /// <summary>A table with a row per set of strength work.</summary>
+    Sets,
+
+    /// <summary>A table with a row per function test or reference value.</summary>
+    Tests,
+
+    /// <summary>A table with a row per person and date: rest, illness, attendance.</summary>
+    Days,
+
+    /// <summary>A table with a row per planned session or phase.</summary>
+    Plan,
+
+    /// <summary>A table with a row per answer of staff.</summary>
+    Answers,
 }
 
 /// <summary>
 /// Describes one kind of CSV file, so that nothing about it is guessed. A file has a layout when its first line holds every name of
 /// <see cref="Header"/>, the time column, the columns of start, date, person and quality that the layout names, and at least one channel
-/// column. Names are compared exactly, without the blanks around them.
+/// column; of a table the date or time column and at least one column of <see cref="Fields"/> or <see cref="Wide"/>, if any is named there.
+/// Names are compared exactly, without the blanks around them.
 /// </summary>
 public sealed record CsvLayout
 {
@@ -43,7 +62,7 @@ public sealed record CsvLayout
     /// </summary>
     public string Encoding { get; init; } = CsvText.Auto;
 
-    /// <summary>Where the time of a row stands. No default.</summary>
+    /// <summary>Where the time of a row stands. No default. Of a table: where the date stands in a moment.</summary>
     public CsvTimeColumn Time { get; init; } = new();
 
     /// <summary>The columns that hold readings. One that is not in <see cref="Header"/> may be absent from a file. No default.</summary>
@@ -61,13 +80,54 @@ public sealed record CsvLayout
     public string? SportColumn { get; init; }
 
     /// <summary>
-    /// The column that tells the people or devices of one file apart, as the file writes them: each gets recordings of its own, and a row
-    /// without one cannot be used. Rows of one person more than 60 min apart are two recordings. Default null: one file is one recording.
+    /// The column of the person. Of samples it tells the people or devices of one file apart, as the file writes them: each gets recordings of its
+    /// own, and a row without one cannot be used; rows of one person more than 60 min apart are two recordings. Of a table it may be absent from
+    /// a file: then the rows are about the owner of the file. Default null: one file is one recording, or a table about its owner.
     /// </summary>
     public string? PersonColumn { get; init; }
 
-    /// <summary>Which rows were received too badly to give a position. Default null: every reading counts.</summary>
+    /// <summary>Of samples: which rows were received too badly to give a position. Default null: every reading counts.</summary>
     public CsvQuality? Quality { get; init; }
+
+    /// <summary>Of plan and answers: the column that names a group instead of a person; may be absent from a file. Default null.</summary>
+    public string? GroupColumn { get; init; }
+
+    /// <summary>Of a table: the column of the date. Default null: see <see cref="Time"/>.</summary>
+    public string? DateColumn { get; init; }
+
+    /// <summary>
+    /// How the date is written: <c>iso8601</c> (<c>2026-03-31</c>) or a NodaTime pattern of a full date (<c>dd.MM.yyyy</c>). Default
+    /// <c>iso8601</c>.
+    /// </summary>
+    public string DateFormat { get; init; } = CsvTimeColumn.Iso8601;
+
+    /// <summary>Of a table: what its columns hold. One that is not in <see cref="Header"/> may be absent from a file. Default none.</summary>
+    public IReadOnlyList<CsvField> Fields { get; init; } = [];
+
+    /// <summary>
+    /// Of a table: fields that are the same in every row, each with its value as our own formats write it (<c>"sport": "soccer"</c>). Default
+    /// none.
+    /// </summary>
+    public IReadOnlyDictionary<string, string> Constants { get; init; } = new Dictionary<string, string>();
+
+    /// <summary>
+    /// Of a table whose line holds several rows side by side: an entry for each. One whose own cells are all empty makes no row. Default none: a
+    /// line is a row.
+    /// </summary>
+    public IReadOnlyList<CsvWideEntry> Wide { get; init; } = [];
+
+    /// <summary>
+    /// Of a table: whether it is told by its <c>file</c> name, so that a later file of the same name is its next version, or by its
+    /// <c>folder</c>, where files of changing names are versions of one table. Default <c>file</c>.
+    /// </summary>
+    public TableNaming Table { get; init; } = TableNaming.File;
+
+    /// <summary>
+    /// Of a table: whether a version speaks for the <c>dates</c> from its first row's on, so that older rows stay, or for <c>everything</c>, so
+    /// that a row that is gone is retracted. Default null: <c>dates</c> for sessions, sets and days, <c>everything</c> for tests, plan and
+    /// answers.
+    /// </summary>
+    public TableCover? Covers { get; init; }
 
     /// <summary>Why this layout cannot be used, one sentence each; empty when it can.</summary>
     public IReadOnlyList<string> Validate() => CsvLayoutCheck.Reasons(this);

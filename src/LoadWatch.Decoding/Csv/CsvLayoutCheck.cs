@@ -1,3 +1,4 @@
+using LoadWatch.Decoding.Csv.Tables;
 using LoadWatch.Recordings;
 using NodaTime;
 
@@ -7,9 +8,12 @@ namespace LoadWatch.Decoding.Csv;
 internal static class CsvLayoutCheck
 {
     public static IReadOnlyList<string> Reasons(CsvLayout layout) =>
+        [.. Basics(layout), .. Header(layout), .. layout.Kind == CsvKind.Samples ? Samples(layout) : TableLayoutCheck.Reasons(layout)];
+
+    private static IEnumerable<string> Samples(CsvLayout layout) =>
     [
-        .. Basics(layout), .. Header(layout), .. Time(layout.Time), .. Channels(layout.Columns), .. SharedColumns(layout), .. Sport(layout),
-        .. QualityCell.Complaints(layout.Quality),
+        .. Time(layout.Time), .. Channels(layout.Columns), .. SharedColumns(layout), .. Sport(layout), .. QualityCell.Complaints(layout.Quality),
+        .. TableLayoutCheck.OfTablesOnly(layout),
     ];
 
     private static IEnumerable<string> Basics(CsvLayout layout)
@@ -56,7 +60,7 @@ internal static class CsvLayoutCheck
         }
     }
 
-    private static IEnumerable<string> Time(CsvTimeColumn time)
+    internal static IEnumerable<string> Time(CsvTimeColumn time)
     {
         if (string.IsNullOrWhiteSpace(time.Column))
         {

@@ -1,3 +1,4 @@
+using LoadWatch.Decoding.Csv.Tables;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Csv;
@@ -34,6 +35,9 @@ internal sealed record LayoutChoice(CsvLayout? Layout, CsvTable? Table, Problem?
     private static (string Encoding, char Delimiter) Dialect(CsvLayout layout) => (layout.Encoding, layout.Delimiter);
 
     private static bool Fits(CsvLayout layout, CsvTable table) =>
+        layout.Kind == CsvKind.Samples ? FitsSamples(layout, table) : TableColumns.Fit(layout, table);
+
+    private static bool FitsSamples(CsvLayout layout, CsvTable table) =>
         layout.Header.All(table.Has)
         && table.Has(layout.Time.Column)
         && Wanted(layout).All(name => name is null || table.Has(name))
@@ -51,8 +55,9 @@ internal sealed record LayoutChoice(CsvLayout? Layout, CsvTable? Table, Problem?
             : Refused(new Problem(ProblemSeverity.Error, "two columns have this name", Line: table.Line, Field: used));
     }
 
-    private static IEnumerable<string?> UsedColumns(CsvLayout layout) =>
-        [.. layout.Columns.Select(column => column.Column), layout.Time.Column, layout.SportColumn, .. Wanted(layout)];
+    private static IEnumerable<string?> UsedColumns(CsvLayout layout) => layout.Kind == CsvKind.Samples
+        ? [.. layout.Columns.Select(column => column.Column), layout.Time.Column, layout.SportColumn, .. Wanted(layout)]
+        : TableColumns.Named(layout);
 
     private static Problem NoneFits(IEnumerable<CsvTable> tables, IReadOnlyList<CsvLayout> layouts)
     {

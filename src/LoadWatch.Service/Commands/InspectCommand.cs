@@ -55,7 +55,7 @@ public static class InspectCommand
 
     private static int Run(IEnumerable<string> names, bool json, string? configPath)
     {
-        var decoders = new DecoderSet(configPath is null ? [Decoding.Csv.BuiltInLayouts.Samples] : ConfigurationReader.Read(configPath).Layouts);
+        var decoders = new DecoderSet(configPath is null ? Decoding.Csv.BuiltInLayouts.All : ConfigurationReader.Read(configPath).Layouts);
         var lines = names.AsParallel().AsOrdered().SelectMany(name => Inspect(decoders, name)).AsSequential();
         using var output = new StreamWriter(Console.OpenStandardOutput(), new UTF8Encoding(false), 1 << 16);
         if (json)

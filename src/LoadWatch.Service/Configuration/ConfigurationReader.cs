@@ -74,7 +74,7 @@ public sealed class ConfigurationReader
             contacts,
             new AnchorBook(anchors!),
             inboxes,
-            [.. file.Layouts, BuiltInLayouts.Samples],
+            [.. file.Layouts, .. BuiltInLayouts.All],
             computation,
             Duration.FromSeconds(file.Intake.ScanSeconds),
             Duration.FromSeconds(file.Intake.SettleSeconds),

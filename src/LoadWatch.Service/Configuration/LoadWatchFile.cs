@@ -49,7 +49,7 @@ public sealed record LoadWatchFile
     /// <summary>The server that takes mail.</summary>
     public MailEntry Mail { get; init; } = new();
 
-    /// <summary>CSV layouts beside the built-in one; the header picks the layout.</summary>
+    /// <summary>CSV layouts beside the built-in ones; the header picks the layout.</summary>
     public IReadOnlyList<CsvLayout> Layouts { get; init; } = [];
 
     /// <summary>Zones, body regions, and how much of a recording must be usable.</summary>

@@ -20,17 +20,25 @@ public static class ValueCheck
     public static IReadOnlyList<string> WordsOf(Type enumeration) =>
         [.. Enum.GetNames(enumeration).Where(name => enumeration != typeof(IsoDayOfWeek) || name != nameof(IsoDayOfWeek.None)).Select(JsonNamingPolicy.SnakeCaseLower.ConvertName)];
 
-    private static (bool Fits, string Wanted) Judge(JsonElement element, JsonTypeInfo type) => type switch
+    private static (bool Fits, string Wanted) Judge(JsonElement element, JsonTypeInfo type) => type.Kind switch
     {
-        { Kind: JsonTypeInfoKind.Object or JsonTypeInfoKind.Dictionary } => (element.ValueKind == JsonValueKind.Object, "an object in braces"),
-        { Kind: JsonTypeInfoKind.Enumerable } => (element.ValueKind == JsonValueKind.Array, "a list in brackets"),
-        { Type.IsEnum: true } => (IsOneOf(element, WordsOf(type.Type)), $"one of {string.Join(", ", WordsOf(type.Type))}"),
-        _ when type.Type == typeof(bool) => (element.ValueKind is JsonValueKind.True or JsonValueKind.False, "true or false"),
-        _ when type.Type == typeof(int) => (element.ValueKind == JsonValueKind.Number && element.TryGetInt32(out _), "a whole number"),
-        _ when type.Type == typeof(double) => (IsFinite(element), "a number"),
-        _ when type.Type == typeof(char) => (element.ValueKind == JsonValueKind.String && element.GetString()!.Length == 1, "one character in quotes"),
+        JsonTypeInfoKind.Object or JsonTypeInfoKind.Dictionary => (element.ValueKind == JsonValueKind.Object, "an object in braces"),
+        JsonTypeInfoKind.Enumerable => (element.ValueKind == JsonValueKind.Array, "a list in brackets"),
+        _ => Judge(element, Stated(type)),
+    };
+
+    private static (bool Fits, string Wanted) Judge(JsonElement element, Type type) => type switch
+    {
+        { IsEnum: true } => (IsOneOf(element, WordsOf(type)), $"one of {string.Join(", ", WordsOf(type))}"),
+        _ when type == typeof(bool) => (element.ValueKind is JsonValueKind.True or JsonValueKind.False, "true or false"),
+        _ when type == typeof(int) => (element.ValueKind == JsonValueKind.Number && element.TryGetInt32(out _), "a whole number"),
+        _ when type == typeof(double) => (IsFinite(element), "a number"),
+        _ when type == typeof(char) => (element.ValueKind == JsonValueKind.String && element.GetString()!.Length == 1, "one character in quotes"),
         _ => (element.ValueKind == JsonValueKind.String, "text in quotes"),
     };
+
+    /// <summary>The type of a value that is there.</summary>
+    private static Type Stated(JsonTypeInfo type) => Nullable.GetUnderlyingType(type.Type) ?? type.Type;
 
     private static bool IsOneOf(JsonElement element, IReadOnlyList<string> words) =>
         element.ValueKind == JsonValueKind.String && words.Contains(element.GetString()!, StringComparer.OrdinalIgnoreCase);
@@ -39,7 +47,7 @@ public static class ValueCheck
         element.ValueKind == JsonValueKind.Number && element.TryGetDouble(out var number) && double.IsFinite(number);
 
     private static string Hint(JsonElement element, JsonTypeInfo type) =>
-        type.Type.IsEnum && element.ValueKind == JsonValueKind.String ? Nearest.Hint(element.GetString()!, WordsOf(type.Type)) : "";
+        Stated(type).IsEnum && element.ValueKind == JsonValueKind.String ? Nearest.Hint(element.GetString()!, WordsOf(Stated(type))) : "";
 
     private static string Shown(JsonElement element) => element.ValueKind switch
     {

@@ -82,6 +82,8 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
             Activities = activities,
             Plan = plan,
             Tests = tests.FindAll(test => test.Date <= through),
+            Series = group.Limits.Quantities.ToDictionary(
+                name => name, name => new QuantitySeries(name, LoadUnits.Of(name), Days(person, name, [], activities, through, plan)), StringComparer.Ordinal),
         });
         return new ComputedSeries(
             person.Id,

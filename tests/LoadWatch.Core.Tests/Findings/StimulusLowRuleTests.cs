@@ -71,10 +71,6 @@ public class StimulusLowRuleTests
         Assert.Empty(Rule.Of([.. Visits(80), .. Enumerable.Range(80, 9).Select(day => Unknown(day))], birthYear: 1950));
     }
 
-    [Fact]
-    public void SwitchedOffItSaysNothing() => Assert.Empty(Rule.Of(
-        Visits(100, missed: [73, 78]), 1950, new RuleLimits { StimulusLow = new StimulusLowLimits { Enabled = false } }));
-
     /// <summary>Heavy on the second and fourth day of each week, rest on the others.</summary>
     private static List<Day> Visits(int days, int[]? missed = null) => Heavy(days, day => day % 7 is 1 or 3 && missed?.Contains(day) is not true);
 

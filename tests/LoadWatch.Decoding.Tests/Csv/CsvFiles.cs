@@ -27,7 +27,7 @@ internal static class CsvFiles
     public static DecodedFile Decode(string text, params CsvLayout[] layouts) => Decode(Encoding.UTF8.GetBytes(text), layouts);
 
     public static DecodedFile Decode(byte[] bytes, params CsvLayout[] layouts) =>
-        CsvSamplesDecoder.Decode(bytes, layouts.Length == 0 ? [BuiltInLayouts.Samples] : layouts);
+        CsvDecoder.Decode(bytes, layouts.Length == 0 ? [BuiltInLayouts.Samples] : layouts);
 
     public static Recording Only(DecodedFile file)
     {

@@ -136,7 +136,7 @@ public class CsvLayoutTests
 
     [Fact]
     public void WithoutLayoutsNothingIsGuessed() =>
-        Assert.Equal("line 1: a CSV, but no layout is configured", CsvSamplesDecoder.Decode("a,b\n"u8.ToArray(), []).Problems[0].ToString());
+        Assert.Equal("line 1: a CSV, but no layout is configured", CsvDecoder.Decode("a,b\n"u8.ToArray(), []).Problems[0].ToString());
 
     [Theory]
     [InlineData("running", "running", 0)]

@@ -11,6 +11,9 @@ public sealed class ConfigurationMistakesTests
     [InlineData("{ \"groups\": [ {\n\"limits\": {\n\"silence\": {\n\"extra_day\": 1 } } } ] }",
         """loadwatch.json:4: "extra_day" is not a key here; did you mean "extra_days"?""")]
     [InlineData("{ \"layouts\": [ { \"time\": {\n\"colum\": \"t\" } } ] }", """loadwatch.json:2: "colum" is not a key here; did you mean "column"?""")]
+    [InlineData("{ \"layouts\": [ { \"fields\": [\n{ \"colum\": \"t\" } ] } ] }", """loadwatch.json:2: "colum" is not a key here; did you mean "column"?""")]
+    [InlineData("{ \"layouts\": [ { \"wide\": [ {\n\"fields\": [\n{ \"unti\": \"kg\" } ] } ] } ] }",
+        """loadwatch.json:3: "unti" is not a key here; did you mean "unit"?""")]
     [InlineData("{\n\"data\": \"a\",\n\"data\": \"b\" }", """loadwatch.json:3: "data" stands twice here, first in line 2""")]
     public void AKeyThatIsNotOne(string json, string fault) => Assert.Equal([fault], ConfigurationFolder.FaultsWith("loadwatch.json", json));
 
@@ -29,6 +32,12 @@ public sealed class ConfigurationMistakesTests
     [InlineData("""{ "computation": { "exercises": { "squat": null } } }""",
         "loadwatch.json:1: computation.exercises.squat: null is not a list in brackets")]
     [InlineData("""{ "layouts": [ { "delimiter": ";;" } ] }""", """loadwatch.json:1: layouts[0].delimiter: ";;" is not one character in quotes""")]
+    [InlineData("""{ "layouts": [ { "wide": [ { "set": "1" } ] } ] }""", """loadwatch.json:1: layouts[0].wide[0].set: "1" is not a whole number""")]
+    [InlineData("""{ "layouts": [ { "constants": { "set": 1 } } ] }""", "loadwatch.json:1: layouts[0].constants.set: 1 is not text in quotes")]
+    [InlineData("""{ "layouts": [ { "kind": "stes" } ] }""",
+        """loadwatch.json:1: layouts[0].kind: "stes" is not one of samples, sessions, sets, tests, days, plan, answers; did you mean "sets"?""")]
+    [InlineData("""{ "layouts": [ { "covers": "dtes" } ] }""",
+        """loadwatch.json:1: layouts[0].covers: "dtes" is not one of dates, everything; did you mean "dates"?""")]
     [InlineData("""{ "inboxes": [ { "take": "mvoe" } ] }""",
         """loadwatch.json:1: inboxes[0].take: "mvoe" is not one of leave, move; did you mean "move"?""")]
     [InlineData("""{ "contacts": [ { "role": "physio" } ] }""",

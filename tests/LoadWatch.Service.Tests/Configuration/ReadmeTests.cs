@@ -82,7 +82,12 @@ public sealed class ReadmeTests
     [Fact]
     public void EveryKeyOfTheConfigurationIsNamed()
     {
-        var missing = new[] { typeof(InboxEntry), typeof(GroupEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(CsvLayout), typeof(CsvQuality) }
+        Type[] types =
+        [
+            typeof(InboxEntry), typeof(GroupEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(CsvLayout), typeof(CsvQuality), typeof(CsvField),
+            typeof(CsvWideEntry),
+        ];
+        var missing = types
             .SelectMany(type => type.GetProperties())
             .Concat(typeof(LoadWatchFile).GetProperties().Where(property => property.Name != nameof(LoadWatchFile.Schema)))
             .Select(KeyOf)

@@ -1,0 +1,26 @@
+using LoadWatch.Decoding.Csv.Tables;
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Decoding.Csv;
+
+/// <summary>Decodes CSV files: one of the kind <c>samples</c> is a recording or holds those of several people, one of any other kind is a table.</summary>
+public static class CsvDecoder
+{
+    /// <summary>
+    /// Picks the layout by the file's column names and reads every row by it. A row with a bad cell is a problem with its line, column and
+    /// field, and the others count; with too many bad rows (more than 1 % of samples, more than 10 % of a table and more than 3) or no good one
+    /// the file gives nothing. Speeds of one person that seem to be in another unit than those of the others are left out.
+    /// </summary>
+    /// <param name="bytes">The whole file.</param>
+    /// <param name="layouts">The layouts known.</param>
+    public static DecodedFile Decode(ReadOnlyMemory<byte> bytes, IReadOnlyList<CsvLayout> layouts)
+    {
+        ArgumentNullException.ThrowIfNull(layouts);
+        return LayoutChoice.Make(bytes, layouts) switch
+        {
+            { Problem: { } problem } => new DecodedFile("csv", FileType: null, SourceName: null, [], [problem]),
+            { Layout.Kind: CsvKind.Samples } samples => UnitOutliers.LeaveOut(new SampleReading(samples.Table!, samples.Layout!).Read()),
+            var table => new TableReading(table.Table!, table.Layout!).Read(),
+        };
+    }
+}
