@@ -19,7 +19,7 @@ public static class QuantityWords
         QuantityNames.Distance => "distance",
         QuantityNames.Climb => "climb",
         QuantityNames.SpeedTop => "top speed",
-        QuantityNames.SpeedTopShare => "top speed as a share of the best",
+        QuantityNames.SpeedTopShare => "share of the own top speed",
         QuantityNames.PowerTop => "top power",
         QuantityNames.Accelerations => "number of accelerations",
         QuantityNames.Decelerations => "number of decelerations",
@@ -28,7 +28,7 @@ public static class QuantityWords
         QuantityNames.Repetitions => "number of repetitions",
         QuantityNames.Kilograms => "weight lifted",
         _ when BoundOf(name, DistanceAbove.Prefix, "_m_s") is { } bound => $"distance at {bound} m/s and faster",
-        _ when BoundOf(name, DistanceAbove.Prefix, "_percent_speed_max") is { } share => $"distance at {share} % of the best speed and faster",
+        _ when BoundOf(name, DistanceAbove.Prefix, "_percent_speed_max") is { } share => $"distance at {share} % of the own top speed and faster",
         _ when name.StartsWith(QuantityNames.OneRepetitionMaxOf, StringComparison.Ordinal) =>
             $"estimated maximum of {name[QuantityNames.OneRepetitionMaxOf.Length..].Replace('_', ' ')}",
         _ => $"\"{name.Replace('_', ' ')}\"",

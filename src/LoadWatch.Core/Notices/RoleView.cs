@@ -10,7 +10,7 @@ namespace LoadWatch.Notices;
 public sealed record RoleView
 {
     /// <summary>The rule about tests of function; it is told to clinicians and to the person.</summary>
-    private const string FunctionTest = FunctionTestRule.RuleName;
+    public const string FunctionTest = FunctionTestRule.RuleName;
 
     private readonly ContactRole role;
 

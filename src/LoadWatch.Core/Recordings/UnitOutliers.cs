@@ -38,19 +38,17 @@ public static class UnitOutliers
         };
     }
 
-    private static List<SubjectSpeed> Speeds(IReadOnlyList<Recording> recordings) =>
-    [
-        .. from recording in recordings
-           where recording.Subject is not null && recording.Samples.Has(Channel.Speed)
-           group recording by recording.Subject into ofOne
-           let speed = SubjectSpeed.Of(ofOne.Key, ofOne)
-           where speed is not null
-           select speed,
-    ];
+    private static List<SubjectSpeed> Speeds(IReadOnlyList<Recording> recordings)
+    {
+        // One list for all, one after the other: a squad's match holds more than a million readings.
+        var moving = new List<double>();
+        var byPerson = recordings.Where(recording => recording.Subject is not null && recording.Samples.Has(Channel.Speed)).GroupBy(recording => recording.Subject!);
+        return [.. byPerson.Select(ofOne => SubjectSpeed.Of(ofOne.Key, ofOne, moving)).OfType<SubjectSpeed>()];
+    }
 
     private static double? Times(SubjectSpeed one, List<SubjectSpeed> all)
     {
-        var others = all.Where(other => other != one).Select(other => other.Median).Order().ToArray();
+        var others = all.Where(other => other != one).Select(other => other.Median).Order().ToList();
         var times = one.Median / SubjectSpeed.Share(others, 0.5);
         return times > TimesTheOthers && one.High > HighSpeed ? times : null;
     }
@@ -72,14 +70,30 @@ public static class UnitOutliers
     /// <param name="High">Their 99th percentile, m/s.</param>
     private sealed record SubjectSpeed(string Subject, double Median, double High)
     {
-        public static SubjectSpeed? Of(string subject, IEnumerable<Recording> recordings)
+        public static SubjectSpeed? Of(string subject, IEnumerable<Recording> recordings, List<double> moving)
         {
-            var moving = recordings.SelectMany(recording => recording.Samples[Channel.Speed].ToArray()).Where(value => value >= MovingFrom).ToArray();
-            Array.Sort(moving);
-            return moving.Length == 0 ? null : new SubjectSpeed(subject, Share(moving, 0.5), Share(moving, 0.99));
+            moving.Clear();
+            foreach (var recording in recordings)
+            {
+                AddMoving(moving, recording.Samples[Channel.Speed]);
+            }
+
+            moving.Sort();
+            return moving.Count == 0 ? null : new SubjectSpeed(subject, Share(moving, 0.5), Share(moving, 0.99));
         }
 
         /// <summary>The value at a share of a sorted row: the nearest rank.</summary>
-        public static double Share(double[] sorted, double share) => sorted[Math.Max(0, (int)Math.Ceiling(share * sorted.Length) - 1)];
+        public static double Share(List<double> sorted, double share) => sorted[Math.Max(0, (int)Math.Ceiling(share * sorted.Count) - 1)];
+
+        private static void AddMoving(List<double> moving, ReadOnlySpan<double> speeds)
+        {
+            foreach (var speed in speeds)
+            {
+                if (speed >= MovingFrom)
+                {
+                    moving.Add(speed);
+                }
+            }
+        }
     }
 }

@@ -23,6 +23,9 @@ internal sealed record CsvTable(CsvText Text, char Separator, int RowsAbove, lon
         return StatedSeparator(rows, separator) is { } stated ? OpenBelow(text, stated) : At(text, separator, rowsAbove: 1, rows);
     }
 
+    /// <summary>There are no more rows than this below the names.</summary>
+    public int RowsAtMost => Math.Max(0, Text.LinesAtMost() - RowsAbove);
+
     /// <summary>The rows below the names.</summary>
     public CsvRows Rows()
     {

@@ -23,6 +23,14 @@ internal sealed record CsvText(ReadOnlyMemory<byte> Bytes, Encoding? Encoding)
         _ => new(bytes, ByName(bytes.Span, name)),
     };
 
+    /// <summary>At most this many lines: line ends of all three kinds, and one more where the text does not end with one.</summary>
+    public int LinesAtMost()
+    {
+        var span = Bytes.Span;
+        var open = span is [.., (byte)'\n' or (byte)'\r'] ? 0 : 1;
+        return span.Count((byte)'\n') + span.Count((byte)'\r') - span.Count("\r\n"u8) + open;
+    }
+
     private static Encoding? ByName(ReadOnlySpan<byte> bytes, string name) => name switch
     {
         Utf8Name => null,

@@ -2,11 +2,14 @@ using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Csv;
 
-/// <summary>Fills the columns of a series; memory is what the readings need, and a channel without a reading takes none.</summary>
-internal sealed class SampleColumns
+/// <summary>
+/// Fills the columns of a series. They are made once, for as many rows as there can be, so memory is what the readings need; a channel
+/// without a reading takes none.
+/// </summary>
+internal sealed class SampleColumns(int rowsAtMost)
 {
-    private readonly GrowingColumn<long> times = new(SampleSeries.Undated);
-    private readonly GrowingColumn<double>?[] values = new GrowingColumn<double>?[Enum.GetValues<Channel>().Length];
+    private readonly long[] times = new long[rowsAtMost];
+    private readonly double[]?[] values = new double[]?[Enum.GetValues<Channel>().Length];
 
     public int Count { get; private set; }
 
@@ -19,7 +22,7 @@ internal sealed class SampleColumns
         {
             if (!double.IsNaN(readings[channel]))
             {
-                (values[channel] ??= new(double.NaN))[Count] = readings[channel];
+                (values[channel] ??= Empty())[Count] = readings[channel];
             }
         }
 
@@ -34,11 +37,20 @@ internal sealed class SampleColumns
         {
             if (values[(int)channel] is { } column)
             {
-                columns[channel] = column.Close(Count);
+                columns[channel] = Cut(column);
                 values[(int)channel] = null;
             }
         }
 
-        return new SampleSeries(times.Close(Count), columns);
+        return new SampleSeries(Cut(times), columns);
     }
+
+    private double[] Empty()
+    {
+        var column = new double[times.Length];
+        Array.Fill(column, double.NaN);
+        return column;
+    }
+
+    private T[] Cut<T>(T[] column) => column.Length == Count ? column : column[..Count];
 }

@@ -5,8 +5,8 @@ namespace LoadWatch.Decoding.Csv;
 /// <summary>Reads the rows of one file by one layout.</summary>
 internal sealed class SampleReading
 {
-    // A day at 20 Hz and more, or 25 people for two hours at 10 Hz; with every channel filled the columns stay near 110 MB.
-    private const int RowsAtMost = 2_000_000;
+    /// <summary>A day at 20 Hz and more, or 25 people for two hours at 10 Hz; with every channel filled the columns stay near 110 MB.</summary>
+    public const int RowsAtMost = 2_000_000;
 
     // A squad for a season; without a limit a file of rows an hour apart would give a recording a row.
     private const int RecordingsAtMost = 2_000;

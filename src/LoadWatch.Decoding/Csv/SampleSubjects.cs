@@ -10,6 +10,7 @@ internal sealed class SampleSubjects(CsvTable table, CsvLayout layout)
     private const int LongestCharacters = 100;
 
     private readonly int? column = table.Find(layout.PersonColumn);
+    private readonly Dictionary<string, int> rowsOf = RowCounts(table, layout.PersonColumn);
     private readonly Dictionary<string, SampleSubject> known = new(StringComparer.Ordinal);
     private readonly List<SampleSubject> inOrder = [];
 
@@ -33,24 +34,53 @@ internal sealed class SampleSubjects(CsvTable table, CsvLayout layout)
     {
         0 => table.Wrong(rows, index, "no person or device"),
         > LongestCharacters => table.Wrong(rows, index, $"more than {LongestCharacters} characters name no person or device"),
-        _ when inOrder.Count == SubjectsAtMost => table.Wrong(rows, index, $"more than {SubjectsAtMost} people in one file"),
+        _ when !rowsOf.ContainsKey(name) => table.Wrong(rows, index, $"more than {SubjectsAtMost} people in one file"),
         _ => null,
     };
 
     private SampleSubject Add(string name)
     {
-        var added = new SampleSubject(column is null ? null : name);
+        var rows = Math.Min(SampleReading.RowsAtMost, column is null ? table.RowsAtMost : rowsOf[name]);
+        var added = new SampleSubject(column is null ? null : name, rows);
         known.Add(name, added);
         inOrder.Add(added);
         return added;
     }
+
+    /// <summary>
+    /// Rows by person, of as many as are taken. A look through the file of its own: columns that grow would be copied, and for a moment
+    /// there twice.
+    /// </summary>
+    private static Dictionary<string, int> RowCounts(CsvTable table, string? personColumn)
+    {
+        var counts = new Dictionary<string, int>(StringComparer.Ordinal);
+        if (table.Find(personColumn) is not { } column)
+        {
+            return counts;
+        }
+
+        using var rows = table.Rows();
+        while (rows.Next())
+        {
+            var name = column < rows.CellCount ? rows.Text(column) : "";
+            if (counts.TryGetValue(name, out var count) || counts.Count < SubjectsAtMost)
+            {
+                counts[name] = count + 1;
+            }
+        }
+
+        return counts;
+    }
 }
 
 /// <summary>The rows of one person or device.</summary>
-/// <param name="Name">As the file writes it; null where it tells none apart.</param>
-internal sealed record SampleSubject(string? Name)
+/// <param name="name">As the file writes it; null where it tells none apart.</param>
+/// <param name="rowsAtMost">As many rows as there can be of it.</param>
+internal sealed class SampleSubject(string? name, int rowsAtMost)
 {
+    public string? Name => name;
+
     public ClockTrack Clock { get; } = new();
 
-    public SampleColumns Samples { get; } = new();
+    public SampleColumns Samples { get; } = new(rowsAtMost);
 }

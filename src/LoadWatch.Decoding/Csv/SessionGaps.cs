@@ -11,31 +11,34 @@ internal static class SessionGaps
     /// <summary>By time; within one the rows keep the order of the file. Every row is in exactly one.</summary>
     public static IReadOnlyList<SampleSeries> Split(SampleSeries rows)
     {
-        var order = ByTime(rows.UnixMilliseconds);
-        var starts = Starts(rows.UnixMilliseconds, order);
-        if (starts.Count == 1)
+        if (IsOne(rows.UnixMilliseconds))
         {
             return [rows];
         }
 
-        return [.. starts.Select((start, i) => OfFile(rows, order[start..(i + 1 < starts.Count ? starts[i + 1] : order.Length)]))];
+        var order = ByTime(rows.UnixMilliseconds);
+        var starts = Starts(rows.UnixMilliseconds, order);
+        return starts.Count == 1 ? [rows] : [.. starts.Select((start, i) => OfFile(rows, order[start..(i + 1 < starts.Count ? starts[i + 1] : order.Length)]))];
+    }
+
+    /// <summary>The usual case: in order and without a gap.</summary>
+    private static bool IsOne(ReadOnlySpan<long> times)
+    {
+        for (var row = 1; row < times.Length; row++)
+        {
+            if (times[row] - times[row - 1] is < 0 or > LongestMilliseconds)
+            {
+                return false;
+            }
+        }
+
+        return true;
     }
 
     private static int[] ByTime(ReadOnlySpan<long> times)
     {
-        var order = new int[times.Length];
-        var ascending = true;
-        for (var row = 0; row < order.Length; row++)
-        {
-            order[row] = row;
-            ascending &= row == 0 || times[row] >= times[row - 1];
-        }
-
-        if (!ascending)
-        {
-            Array.Sort(times.ToArray(), order);
-        }
-
+        int[] order = [.. Enumerable.Range(0, times.Length)];
+        Array.Sort(times.ToArray(), order);
         return order;
     }
 

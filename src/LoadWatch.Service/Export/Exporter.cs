@@ -60,27 +60,27 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
 
     private IEnumerable<ActivityLine> Activities(string id)
     {
-        var person = configuration.People[id];
+        var known = configuration.People[id];
         var recorded = session.Activities.OfPerson(id, from, to).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
         basis ??= TableBasis.Of(configuration, session);
-        return PersonTraining.Of(session, configuration, basis, person).Activities
+        return PersonTraining.Of(session, configuration, basis, known).Activities
             .Where(activity => InRange(activity.Date))
-            .Select(activity => Activity(person, activity, recorded.GetValueOrDefault(activity.Key)));
+            .Select(activity => Activity(known, activity, recorded.GetValueOrDefault(activity.Key)));
     }
 
     /// <param name="recorded">What was recorded of it; null where rows of tables stand for the session alone.</param>
-    private ActivityLine Activity(Person person, JoinedActivity activity, StoredActivity? recorded)
+    private ActivityLine Activity(Person owner, JoinedActivity activity, StoredActivity? recorded)
     {
         var values = recorded?.Values ?? new ActivityValues();
         return new ActivityLine(
-            person.Id,
+            owner.Id,
             Words.Date(activity.Date),
-            activity.Start is { } start ? Words.Start(start.WithOffset(recorded?.Winner.LocalOffset ?? person.Zone.GetUtcOffset(start))) : null,
+            activity.Start is { } start ? Words.Start(start.WithOffset(recorded?.Winner.LocalOffset ?? owner.Zone.GetUtcOffset(start))) : null,
             activity.Sport.ToString(),
             recorded?.Winner.ElapsedSeconds,
             recorded?.Winner.TimerSeconds,
             activity.Quantities.Select(quantity => new QuantityLine(quantity.Name, quantity.Value, quantity.Unit, quantity.Estimated)).ToList(),
-            configuration.Groups[person.Group].LoadQuantity,
+            configuration.Groups[owner.Group].LoadQuantity,
             TimesInZone(values.TimesInZone),
             values.HeartRateMeanBpm,
             values.HeartRateMaxBpm,

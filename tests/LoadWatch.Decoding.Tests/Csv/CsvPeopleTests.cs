@@ -45,6 +45,17 @@ public class CsvPeopleTests
     }
 
     [Fact]
+    public void ARowTooShortToNameSomebodyIsABadRow()
+    {
+        var rows = string.Concat(Enumerable.Range(0, 200).Select(row => $"2026-10-05T06:{row / 60:00}:{row % 60:00}Z,{row},A\n"));
+
+        var file = CsvFiles.Decode("time,power_w,who\n" + rows + "2026-10-05T07:00:00Z,9\n", Layout);
+
+        Assert.Equal(200, Assert.Single(file.Recordings).Samples.Count);
+        Assert.Equal("line 202: 2 cells for 3 columns", Assert.Single(file.Problems).ToString());
+    }
+
+    [Fact]
     public void ABadRowOfOnePersonCountsAgainstTheWholeFile()
     {
         var rows = string.Concat(Enumerable.Range(0, 198).Select(row => $"A,2026-10-05T06:{row / 60:00}:{row % 60:00}Z,{row}\n"));
