@@ -16,8 +16,11 @@ public sealed record RuleSubject(Person Person, IReadOnlyList<Day> Days, RuleLim
     /// <summary>Unit of the group's load, for texts and evidence.</summary>
     public string LoadUnit { get; init; } = LoadRatioRule.ArbitraryUnits;
 
-    /// <summary>Name of the quantity that is the group's load: what it is of a single session.</summary>
+    /// <summary>Name of the quantity that is the group's load.</summary>
     public string LoadQuantity { get; init; } = QuantityNames.BanisterTrimp;
+
+    /// <summary>The load that each session counts with on its day, by key of the activity; null where that is the quantity as the activity has it.</summary>
+    public IReadOnlyDictionary<string, double?>? SessionLoads { get; init; }
 
     /// <summary>What counts of the person's training up to the last day, by date, then key.</summary>
     public IReadOnlyList<JoinedActivity> Activities { get; init; } = [];

@@ -5,9 +5,10 @@ using NodaTime;
 namespace LoadWatch.Findings;
 
 /// <summary>Compares single sessions with those of the days before.</summary>
-internal sealed class SessionSizes(IReadOnlyList<JoinedActivity> activities, string loadQuantity, SessionSpikeLimits limits)
+internal sealed class SessionSizes(RuleSubject subject)
 {
-    private readonly List<JoinedActivity> sessions = [.. activities.Where(activity => activity.AddsLoad)];
+    private readonly SessionSpikeLimits limits = subject.Limits.SessionSpike;
+    private readonly List<JoinedActivity> sessions = [.. subject.Activities.Where(activity => activity.AddsLoad)];
 
     /// <summary>The sessions of a date that lie beyond the largest before.</summary>
     public IEnumerable<SessionSpike> Spikes(LocalDate date)
@@ -41,7 +42,8 @@ internal sealed class SessionSizes(IReadOnlyList<JoinedActivity> activities, str
 
     private static double? Run(JoinedActivity session) => session.Sport.Name == "running" ? Positive(session[QuantityNames.Distance]) : null;
 
-    private double? Load(JoinedActivity session) => Positive(session[loadQuantity]);
+    private double? Load(JoinedActivity session) =>
+        Positive(subject.SessionLoads is { } loads ? loads.GetValueOrDefault(session.Key) : session[subject.LoadQuantity]);
 
     private static double? Positive(double? value) => value > 0 ? value : null;
 

@@ -19,7 +19,7 @@ public sealed class SessionSpikeRule : IRule
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var limits = subject.Limits.SessionSpike;
-        var sizes = new SessionSizes(subject.Activities, subject.LoadQuantity, limits);
+        var sizes = new SessionSizes(subject);
         var (runs, loads) = (new SpikeHold(limits.HoldDays), new SpikeHold(limits.HoldDays));
         foreach (var day in subject.Days)
         {

@@ -5,8 +5,6 @@ namespace LoadWatch.Loads;
 /// <summary>Names of quantities in the words of a sentence, singular.</summary>
 public static class QuantityWords
 {
-    private const string DistanceUnit = "_m_s";
-
     /// <summary><c>distance at 5.5 m/s and faster</c>; a name that is not built in stands in quotes.</summary>
     public static string Of(string name) => name switch
     {
@@ -17,42 +15,36 @@ public static class QuantityWords
         QuantityNames.IndividualTrimp => "training impulse of own weighting",
         QuantityNames.FosterLoad => "load by rating of effort",
         QuantityNames.Rating => "rating of effort",
-        QuantityNames.Accelerations => "number of accelerations",
-        QuantityNames.Decelerations => "number of decelerations",
-        QuantityNames.PowerTop => "top power",
         QuantityNames.Minutes => "training time",
         QuantityNames.Distance => "distance",
         QuantityNames.Climb => "climb",
         QuantityNames.SpeedTop => "top speed",
+        QuantityNames.SpeedTopShare => "share of the own top speed",
+        QuantityNames.PowerTop => "top power",
+        QuantityNames.Accelerations => "number of accelerations",
+        QuantityNames.Decelerations => "number of decelerations",
         QuantityNames.Work => "work",
         QuantityNames.Sets => "number of sets",
         QuantityNames.Repetitions => "number of repetitions",
         QuantityNames.Kilograms => "weight lifted",
+        _ when BoundOf(name, DistanceAbove.Prefix, "_m_s") is { } bound => $"distance at {bound} m/s and faster",
+        _ when BoundOf(name, DistanceAbove.Prefix, "_percent_speed_max") is { } share => $"distance at {share} % of the own top speed and faster",
         _ when name.StartsWith(QuantityNames.OneRepetitionMaxOf, StringComparison.Ordinal) =>
             $"estimated maximum of {name[QuantityNames.OneRepetitionMaxOf.Length..].Replace('_', ' ')}",
-        QuantityNames.SpeedTopShare => "share of the own top speed",
-        _ when ShareOf(name) is { } percent => $"distance at {percent} % of the own top speed and faster",
-        _ => BoundOf(name) is { } bound ? $"distance at {bound} m/s and faster" : $"\"{name.Replace('_', ' ')}\"",
+        _ => $"\"{name.Replace('_', ' ')}\"",
     };
 
-    /// <summary>The reverse of <see cref="SpeedMaxShares.Name"/>.</summary>
-    private static string? ShareOf(string name)
+    /// <summary><c>5.5</c> of <c>distance_above_5_5_m_s</c>; null for any other name.</summary>
+    private static string? BoundOf(string name, string prefix, string ending)
     {
-        const string Ending = "_percent_speed_max";
-        return name.StartsWith(DistanceAbove.Prefix, StringComparison.Ordinal) && name.EndsWith(Ending, StringComparison.Ordinal)
-            ? name[DistanceAbove.Prefix.Length..^Ending.Length].Replace('_', '.')
-            : null;
-    }
-
-    /// <summary>The reverse of <see cref="DistanceAbove.Name"/>.</summary>
-    private static string? BoundOf(string name)
-    {
-        if (!name.StartsWith(DistanceAbove.Prefix, StringComparison.Ordinal) || !name.EndsWith(DistanceUnit, StringComparison.Ordinal))
+        if (name.Length <= prefix.Length + ending.Length
+            || !name.StartsWith(prefix, StringComparison.Ordinal)
+            || !name.EndsWith(ending, StringComparison.Ordinal))
         {
             return null;
         }
 
-        var bound = name[DistanceAbove.Prefix.Length..Math.Max(DistanceAbove.Prefix.Length, name.Length - DistanceUnit.Length)].Replace('_', '.');
+        var bound = name[prefix.Length..^ending.Length].Replace('_', '.');
         return double.TryParse(bound, NumberStyles.AllowDecimalPoint, CultureInfo.InvariantCulture, out _) ? bound : null;
     }
 }

@@ -44,7 +44,7 @@ public static class LimitsCheck
     {
         foreach (var (name, place) in quantities.Select((name, place) => (name, place)))
         {
-            var reason = name == QuantityNames.SpeedTop ? "is no load: a day's sum of it would mean nothing"
+            var reason = IsTop(name) ? "is no load: a day's sum of it would mean nothing"
                 : IsName(name) ? null
                 : "is not the name of a quantity: a small letter, then small letters, digits and _, 60 at most";
             if (reason is not null)
@@ -53,6 +53,11 @@ public static class LimitsCheck
             }
         }
     }
+
+    /// <summary>Shown by session, never summed over a day.</summary>
+    private static bool IsTop(string name) =>
+        name is QuantityNames.SpeedTop or QuantityNames.SpeedTopShare or QuantityNames.PowerTop or QuantityNames.Rating
+        || name.StartsWith(QuantityNames.OneRepetitionMaxOf, StringComparison.Ordinal);
 
     private static bool IsName(string name) =>
         name.Length is > 0 and <= LongestName

@@ -72,11 +72,13 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
             session.TableRows.OfPerson(person.Id, RowKind.Tests).Select(row => new DatedTest(row.Date, (TestRow)row.Content)).ToList()));
         var activities = training.Activities.Where(activity => activity.Date <= through).ToList();
         var plan = plans[person.Id];
-        var days = Days(person, group.LoadQuantity, group.LoadFallbacks, activities, through, plan);
+        var counted = Counted(person, group.LoadQuantity, group.LoadFallbacks, activities);
+        var days = LoadCalendar.Build(person.Id, counted, through, plan);
         var findings = RuleBook.Evaluate(new RuleSubject(person, days, group.Limits)
         {
             LoadUnit = LoadUnits.Of(group.LoadQuantity),
             LoadQuantity = group.LoadQuantity,
+            SessionLoads = counted.ToDictionary(activity => activity.Key, activity => activity.Load, StringComparer.Ordinal),
             Activities = activities,
             Plan = plan,
             Tests = tests.FindAll(test => test.Date <= through),
@@ -92,11 +94,11 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
             Questions(person, training).Where(question => question.Date >= from).ToList());
     }
 
-    private static IReadOnlyList<Day> Days(
-        Person person, string quantity, IReadOnlyList<string> fallbacks, List<JoinedActivity> activities, LocalDate through, PersonPlan plan)
+    /// <summary>Each session with the load that counts for its day.</summary>
+    private static List<ActivityOnDay> Counted(Person person, string quantity, IReadOnlyList<string> fallbacks, List<JoinedActivity> activities)
     {
         var order = new LoadOrder(quantity, fallbacks, activities.ConvertAll(Loads), person.HeartRateIsValidOn);
-        return LoadCalendar.Build(person.Id, activities.ConvertAll(activity => OnDay(activity, order)), through, plan);
+        return activities.ConvertAll(activity => OnDay(activity, order));
     }
 
     private static SessionLoads Loads(JoinedActivity activity) => new(activity.Date, activity.Quantities);

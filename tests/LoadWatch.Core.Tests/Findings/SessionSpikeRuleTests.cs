@@ -112,6 +112,17 @@ public class SessionSpikeRuleTests
         Assert.StartsWith("Session of 800 kJ on 29 January, 60 % beyond", Assert.Single(found).Text, StringComparison.Ordinal);
     }
 
+    /// <summary>A converted load, or one that does not count for the person, goes before what the activity says of itself.</summary>
+    [Fact]
+    public void TheLoadThatCountsForTheDayGoesFirst()
+    {
+        var subject = Subject(24, [.. Rides, Ride(24, 100)]);
+        var counted = subject.Activities.ToDictionary(ride => ride.Key, ride => (double?)(ride.Date == On(24) ? 170 : 100));
+
+        Assert.Equal(0.7, Assert.Single(Rule.Evaluate(subject with { SessionLoads = counted })).Value);
+        Assert.Empty(Rule.Evaluate(Subject(24, [.. Rides, Ride(24, 300)]) with { SessionLoads = new Dictionary<string, double?>() }));
+    }
+
     [Fact]
     public void ARunAndARideOfOneDateAreTwoFindings() =>
         Assert.Equal([null, "distance"], All(24, [.. Runs, .. Rides, Ride(24, 200), Run(24, 12_000)]).Select(finding => finding.Quantity));

@@ -149,6 +149,8 @@ public sealed class ConfigurationMistakesTests
     [InlineData("7_m_s", "is not the name of a quantity: a small letter, then small letters, digits and _, 60 at most")]
     [InlineData("", "is not the name of a quantity: a small letter, then small letters, digits and _, 60 at most")]
     [InlineData("speed_top", "is no load: a day's sum of it would mean nothing")]
+    [InlineData("rating", "is no load: a day's sum of it would mean nothing")]
+    [InlineData("one_repetition_max_of_squat", "is no load: a day's sum of it would mean nothing")]
     public void ANameThatNoQuantityHas(string name, string fault) => Assert.Equal(
         [$"loadwatch.json:1: limits.weekly_jump.quantities[1]: \"{name}\" {fault}"],
         ConfigurationFolder.FaultsWith("loadwatch.json", $$"""{ "limits": { "weekly_jump": { "quantities": ["distance", "{{name}}"] } } }"""));

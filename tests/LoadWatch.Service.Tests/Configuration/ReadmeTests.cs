@@ -59,9 +59,12 @@ public sealed class ReadmeTests
     }
 
     [Fact]
-    public void EveryRuleHasItsLimitsAndItsTable() =>
-        Assert.Equal(
-            RuleBook.All.Select(rule => $"**`{rule.Name}`**"), Limits.Select(row => row.Data.Item1).Where(heading => heading[0] == '*'));
+    public void EveryRuleHasItsLimitsAndItsTableInItsOrder()
+    {
+        var headings = RuleBook.All.Select(rule => $"**`{rule.Name}`**").ToList();
+        Assert.Equal(headings, Limits.Select(row => row.Data.Item1).Where(headings.Contains));
+        Assert.Equal(headings, headings.OrderBy(heading => Readme.IndexOf($"\n{heading}", StringComparison.Ordinal)));
+    }
 
     [Fact]
     public void EveryAnchorHasItsUnitAndItsRange()
