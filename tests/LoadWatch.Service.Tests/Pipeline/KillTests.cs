@@ -9,7 +9,7 @@ public sealed partial class KillTests : IDisposable
     private const int Kills = 10;
     private const int MostMilliseconds = 500;
 
-    private static readonly string[] Points = ["archived", "waiting", "decoded", "settled", "evaluated", "delivered"];
+    private static readonly string[] Points = ["archived", "waiting", "decoded", "settled", "rows", "evaluated", "delivered"];
 
     private static readonly Lazy<string> Undisturbed = new(() =>
     {
@@ -111,6 +111,7 @@ public sealed partial class KillTests : IDisposable
     private static void AssertEndsWell(WorkingFolder folder, string undisturbed)
     {
         Assert.Equal(undisturbed, folder.Everything());
+        Assert.Contains("\"name\":\"kilograms\",\"value\":800", undisturbed, StringComparison.Ordinal);
         Assert.Contains("\"rule\":\"silence\"", folder.Export("alerts"), StringComparison.Ordinal);
         Assert.Empty(WorkingFolder.Files(Path.Combine(folder.Data, "archive", "incoming")));
         Assert.DoesNotContain(WorkingFolder.Files(folder.Root), path => path.EndsWith(".part", StringComparison.Ordinal) || path.EndsWith(".tmp", StringComparison.Ordinal));
@@ -125,6 +126,11 @@ public sealed partial class KillTests : IDisposable
         folder.Sweep(WorkingFolder.Now - Duration.FromDays(1));
         Assert.Empty(folder.Export("alerts"));
         folder.Fill(last);
+        folder.Fill(
+        [
+            ("sets.csv", Some.Text("date,person,exercise,set,repetitions,kilograms\n2026-06-13,bo,leg_press,1,10,80\n")),
+            ("plan.csv", Some.Text("from,person,plan,start,end\n2026-06-13,bo,class,10:00,11:00\n")),
+        ]);
     }
 
     private static string SweptOnce(IReadOnlyList<(string Path, byte[] Bytes)> files)
