@@ -83,7 +83,9 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
             Plan = plan,
             Tests = tests.FindAll(test => test.Date <= through),
             Series = group.Limits.Quantities.ToDictionary(
-                name => name, name => new QuantitySeries(name, LoadUnits.Of(name), LoadCalendar.Build(person.Id, Counted(person, name, [], activities), through, plan)), StringComparer.Ordinal),
+                name => name,
+                name => new QuantitySeries(name, LoadUnits.Of(name), LoadCalendar.Build(person.Id, Counted(person, name, [], activities), through, plan)),
+                StringComparer.Ordinal),
         });
         return new ComputedSeries(
             person.Id,
