@@ -67,9 +67,9 @@ public sealed class TablesRebuildTests : IDisposable
 
     private static WorkingFolder Configured()
     {
-        var folder = new WorkingFolder();
-        folder.Configure(Layout);
-        return folder;
+        var configured = new WorkingFolder();
+        configured.Configure(Layout);
+        return configured;
     }
 
     private static IReadOnlyList<(string Path, byte[] Bytes)> Files() =>
