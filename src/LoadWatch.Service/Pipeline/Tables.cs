@@ -1,5 +1,6 @@
 using LoadWatch.Notices;
 using LoadWatch.Rows;
+using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Rows;
@@ -48,7 +49,7 @@ public sealed class Tables(WorkingConfiguration configuration, Store store, Arri
         try
         {
             var table = decoder.ReadTable(store.Read(session => session.Arrivals.Get(version.Sha))!);
-            return TableUpdate.Apply(rows, version, table, row => PersonOf(row, version));
+            return NeedsOwner(table) && IsToldElsewhere(version) ? rows : TableUpdate.Apply(rows, version, table, row => PersonOf(row, version));
         }
         catch (Exception e) when (e is InvalidDataException or IOException)
         {
@@ -56,6 +57,20 @@ public sealed class Tables(WorkingConfiguration configuration, Store store, Arri
             report.Unreadable.Add(new BriefLine(version.Path, $"a version of this table cannot be read back: {e.Message}"));
             return rows;
         }
+    }
+
+    private static bool NeedsOwner(DecodedTable table) =>
+        table.Kind is not (RowKind.Plan or RowKind.Answers) && table.Rows.Any(row => row.Subject is null);
+
+    /// <summary>
+    /// Whether a name that names nobody has its owner from another name of the content: it was moved there to be taken up, and what is retracted there later
+    /// must not stand on here.
+    /// </summary>
+    private bool IsToldElsewhere(TableVersion version)
+    {
+        var (names, decided) = store.Read(session => (session.Sightings.Of(version.Sha), session.Decisions.Assigned().ContainsKey(version.Sha)));
+        var byOwner = names.ToLookup(name => Attribution.Claims(null, [new SeenName(name.Inbox, name.Path)], configuration).Count > 0);
+        return !decided && byOwner[true].Any() && byOwner[false].Any(name => name.Path == version.Path && version.Scope.StartsWith($"{name.Inbox}/", StringComparison.Ordinal));
     }
 
     private string? PersonOf(LoadWatch.Rows.TableRow row, TableVersion version) => row.Subject is { } written ? configuration.Subjects.Find(written, row.Date)?.Id : version.Owner;

@@ -26,7 +26,7 @@ public sealed class TableTroubleTests : IDisposable
         Assert.Equal(ArrivalState.Refused, folder.Arrival(damaged)!.State);
         Assert.Equal(before.Item1, folder.Rows());
         Assert.Equal(before.Item2, folder.Export("activities"));
-        Assert.Contains("gym/sets.csv: not usable: ", folder.Brief(), StringComparison.Ordinal);
+        Assert.Contains("gym/sets.csv: Not usable: ", folder.Brief(), StringComparison.Ordinal);
 
         folder.PutTable("gym/sets.csv", 0, [Named, .. Days(4, day => $"{day},bo,leg_press,10,80")]);
         folder.Sweep(WorkingFolder.Now + Duration.FromMinutes(1));
@@ -65,7 +65,7 @@ public sealed class TableTroubleTests : IDisposable
     [Fact]
     public void ATableOfNobodyIsHeldAndTakenUpWhenItIsMoved()
     {
-        var table = folder.PutTable("sets.csv", 0, Unnamed, $"{Nights.Day(1)},leg_press,10,80");
+        var table = folder.PutTable("sets.csv", 0, Unnamed, $"{Nights.Day(2)},leg_press,10,80", $"{Nights.Day(1)},leg_press,10,80");
         folder.Sweep();
         Assert.Equal(ArrivalState.Held, folder.Arrival(table)!.State);
         Assert.Contains("a table that names no people", folder.Brief(), StringComparison.Ordinal);
@@ -76,7 +76,11 @@ public sealed class TableTroubleTests : IDisposable
         folder.Sweep();
 
         Assert.Equal((ArrivalState.Stored, "bo"), (folder.Arrival(table)!.State, folder.Arrival(table)!.Person));
-        Assert.Equal(800, Assert.Single(folder.Activities("bo")).Value("kilograms"));
+        Assert.Equal([800, 800], folder.Activities("bo").Select(activity => activity.Value("kilograms")));
+
+        folder.PutTable("bo/sets.csv", 0, Unnamed, $"{Nights.Day(2)},leg_press,10,80");
+        folder.Sweep(WorkingFolder.Now + Duration.FromMinutes(1));
+        Assert.Equal(Nights.Day(2), Assert.Single(folder.Activities("bo")).GetProperty("date").GetString());
         AssertSettled();
     }
 
