@@ -124,6 +124,20 @@ public sealed class SquadFileTests : IDisposable
         Assert.Single(folder.Activities("bo"));
     }
 
+    [Fact]
+    public void APodIsWhoseItWasOnTheDateOfTheOwnZone()
+    {
+        folder.Write("roster.csv", Roster.Replace("UTC", "Europe/Helsinki", StringComparison.Ordinal));
+        folder.Write("devices.csv", "serial,person,from,to,session\n1001,dora,2026-06-14,,\n1001,bo,,2026-06-13,\n");
+        var minutes = Enumerable.Range(0, 60).SelectMany(at => new[] { "1001", "anna" }.Select(player => $"{player},2026-06-13T22:00:{at:00}Z,130,3"));
+        folder.PutTable("night.csv", 0, ["player,moment,hr,v", .. minutes]);
+
+        folder.Sweep();
+
+        Assert.Equal(["2026-06-14", "2026-06-14"], folder.Activities("dora").Select(activity => activity.GetProperty("date").GetString()));
+        Assert.Empty(folder.Activities("bo").Where(activity => activity.GetProperty("start").GetString()!.Contains("T01:00", StringComparison.Ordinal)));
+    }
+
     /// <summary>The reason of an arrival is its first problem: with everybody in the roster it is what was wrong with the numbers.</summary>
     private LoadWatch.Storage.Recordings.Arrival WithoutStranger()
     {

@@ -34,6 +34,52 @@ public sealed class TableTroubleTests : IDisposable
         AssertSettled();
     }
 
+    [Fact]
+    public void AVersionThatCannotBeReadBackIsTriedAgain()
+    {
+        folder.PutTable("sets.csv", 1, Named, $"{Nights.Day(2)},bo,leg_press,10,80");
+        folder.Sweep(Nights.Before(1));
+        var first = folder.ArchiveNames();
+        folder.PutTable("sets.csv", 0, Named, $"{Nights.Day(2)},bo,leg_press,10,90");
+        folder.Sweep();
+        var before = folder.Everything();
+        var latest = WorkingFolder.Files(Path.Combine(folder.Data, "archive")).Single(path => !first.Contains(Path.GetFileName(path)));
+        folder.Write((_, session) =>
+        {
+            session.TableVersions.SetApplied("inbox/sets.csv", []);
+            return true;
+        });
+        var away = Path.Combine(folder.Root, "away");
+        File.Move(latest, away);
+
+        Assert.Contains("cannot be read back", Assert.Single(folder.Sweep().Unreadable).Sentence, StringComparison.Ordinal);
+        Assert.Equal(800, Assert.Single(folder.Activities("bo")).Value("kilograms"));
+        Assert.Single(folder.Sweep().Unreadable);
+
+        File.Move(away, latest);
+        Assert.Empty(folder.Sweep().Unreadable);
+        Assert.Equal(before, folder.Everything());
+    }
+
+    [Theory]
+    [InlineData("zip", "leave")]
+    [InlineData("gz", "move")]
+    public void APackedTableCountsAsTheTableInIt(string packing, string take)
+    {
+        using var other = new WorkingFolder(take);
+        foreach (var kilograms in new[] { 80, 90 })
+        {
+            var table = Some.Text($"{Named}\n{Nights.Day(1)},bo,leg_press,10,{kilograms}\n");
+            other.Put($"gym.{packing}", packing == "zip" ? Some.Zip(("sets.csv", table)) : Some.Gzip(table), Duration.FromMinutes(180 - kilograms));
+            other.Sweep();
+        }
+
+        Assert.Equal(900, Assert.Single(other.Activities("bo")).Value("kilograms"));
+        var before = other.Everything();
+        other.Rebuild();
+        Assert.Equal(before, other.Everything());
+    }
+
     [Theory]
     [InlineData("sets.csv", Named, "bo,")]
     [InlineData("bo/sets.csv", Unnamed, "")]
