@@ -21,6 +21,9 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
 
     private const int PeopleInOneCommit = 50;
 
+    /// <summary>Recordings of squads are often uploaded two days later.</summary>
+    private const int WaitDays = 2;
+
     private TableBasis basis = null!;
     private IReadOnlyDictionary<string, PersonPlan> plans = null!;
 
@@ -100,19 +103,23 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
     private static List<ActivityOnDay> Counted(Person person, string quantity, IReadOnlyList<string> fallbacks, List<JoinedActivity> activities)
     {
         var order = new LoadOrder(quantity, fallbacks, activities.ConvertAll(Loads), person.HeartRateIsValidOn);
-        return activities.ConvertAll(activity => OnDay(activity, order));
+        return activities.ConvertAll(activity => OnDay(activity, order, quantity));
     }
 
     private static SessionLoads Loads(JoinedActivity activity) => new(activity.Date, activity.Quantities);
 
-    private static ActivityOnDay OnDay(JoinedActivity activity, LoadOrder order) => new(
-        activity.Key, activity.Date, activity.Sources, order.Choose(Loads(activity))?.Value, activity.Stimulus, activity.AddsLoad);
+    /// <summary>What a session of its sport cannot hold is none: a ride lifts no kilograms.</summary>
+    private static ActivityOnDay OnDay(JoinedActivity activity, LoadOrder order, string quantity)
+    {
+        var load = order.Choose(Loads(activity))?.Value ?? (QuantitySports.MayHold(quantity, activity.Sport) ? null : 0);
+        return new ActivityOnDay(activity.Key, activity.Date, activity.Sources, load, activity.Stimulus, activity.AddsLoad);
+    }
 
     /// <summary>An exercise of a set log that has no body region is asked about with the date of the last session.</summary>
     private static IEnumerable<Question> Questions(Person person, JoinResult training)
     {
         var last = training.Activities.Count == 0 ? (LocalDate?)null : training.Activities[^1].Date;
-        return training.Questions.Select(question => new Question(person.Id, question.Date, question.Sentence))
+        return training.Questions.Select(question => new Question(person.Id, question.MayWait ? question.Date.PlusDays(WaitDays) : question.Date, question.Sentence))
             .Concat(last is { } date
                 ? training.UnknownExercises.Select(word => new Question(person.Id, date, $"exercise \"{word}\": which body regions? A line under computation, exercises tells"))
                 : []);
