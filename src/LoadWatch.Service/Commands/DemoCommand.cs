@@ -66,7 +66,7 @@ public static class DemoCommand
         var report = workplace.NewSweep(now).Run(cancel);
         Console.Out.WriteLine(SweepCommand.Counts(report));
         Console.Out.WriteLine();
-        BriefCommand.Print(workplace, null, new Briefs(workplace.Configuration, now, report.Unreadable));
+        BriefCommand.Print(workplace, null, new Briefs(workplace.Configuration, now, report.Unreadable, report.MissingInboxes));
         foreach (var page in report.Pages)
         {
             Console.Out.WriteLine($"Page: {page}");
