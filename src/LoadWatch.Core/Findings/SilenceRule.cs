@@ -1,5 +1,6 @@
 using LoadWatch.Days;
 using LoadWatch.People;
+using LoadWatch.Plans;
 using NodaTime;
 
 namespace LoadWatch.Findings;
@@ -38,17 +39,17 @@ public sealed class SilenceRule : IRule
             {
                 if (planned.Missed.Count >= limits.Silence.PlannedMissed)
                 {
-                    yield return FindPlanned(person, day, planned.Missed, limits.Silence);
+                    yield return FindPlanned(person, day, planned.Missed, Attended(subject.Plan, day.Date), limits.Silence);
                 }
             }
             else if (rhythm is not null && silent > rhythm.LimitDays)
             {
-                yield return Find(person, day, silent, rhythm, limits.Silence);
+                yield return Find(person, day, silent, Attended(subject.Plan, day.Date), rhythm, limits.Silence);
             }
         }
     }
 
-    private Finding Find(Person person, Day day, int silent, RecordingRhythm rhythm, SilenceLimits limits) => new(
+    private Finding Find(Person person, Day day, int silent, string attended, RecordingRhythm rhythm, SilenceLimits limits) => new(
         person.Id,
         day.Date,
         Name,
@@ -58,10 +59,10 @@ public sealed class SilenceRule : IRule
         silent,
         rhythm.LimitDays,
         "days",
-        Sentence(silent, rhythm),
+        Sentence(silent, rhythm, attended),
         Basis(silent, rhythm, limits));
 
-    private Finding FindPlanned(Person person, Day day, IReadOnlyList<LocalDate> missed, SilenceLimits limits) => new(
+    private Finding FindPlanned(Person person, Day day, IReadOnlyList<LocalDate> missed, string attended, SilenceLimits limits) => new(
         person.Id,
         day.Date,
         Name,
@@ -71,7 +72,7 @@ public sealed class SilenceRule : IRule
         missed.Count,
         limits.PlannedMissed,
         "sessions",
-        $"No recording of the last {missed.Count} planned sessions, the first on {Wording.Date(missed[0], day.Date)}.",
+        $"No recording of the last {missed.Count} planned sessions, the first on {Wording.Date(missed[0], day.Date)}.{attended}",
         new Evidence(
             "planned sessions in a row for which a recording was expected and none came, each given some days to come in",
             "a choice",
@@ -81,10 +82,17 @@ public sealed class SilenceRule : IRule
                 new("planned_wait", limits.PlannedWaitDays, "days"),
             ]));
 
-    private static string Sentence(int silent, RecordingRhythm rhythm)
+    /// <summary>Who came and logged nothing is another matter than who stays away.</summary>
+    private static string Attended(PersonPlan plan, LocalDate date)
+    {
+        var there = plan.Attendance.Where(entry => entry.Value && entry.Key <= date).Select(entry => entry.Key).ToList();
+        return there.Count == 0 ? "" : $" Last there on {Wording.Date(there.Max(), date)}, by the list of attendance.";
+    }
+
+    private static string Sentence(int silent, RecordingRhythm rhythm, string attended)
     {
         var usual = rhythm.UsualGapDays == 1 ? "usually one every day" : $"usually one at least every {Wording.Days(rhythm.UsualGapDays)}";
-        return $"No recording for {Wording.Days(silent)}; {usual}.";
+        return $"No recording for {Wording.Days(silent)}; {usual}.{attended}";
     }
 
     private static Evidence Basis(int silent, RecordingRhythm rhythm, SilenceLimits limits) => new(

@@ -31,7 +31,7 @@ public static class BriefBuilder
             Date = date,
             DataUpTo = upTo,
             FirstLine = FirstLine.Of(shown, flagged, silent.Count, upTo, asked, self),
-            Flagged = [.. flagged.Take(FlaggedAtMost).Select(subject => Flag(subject, contact.Role, self))],
+            Flagged = [.. Named(flagged).Select(subject => Flag(subject, contact.Role, self))],
             FlaggedBeyond = Math.Max(0, flagged.Count - FlaggedAtMost),
             Returned = [.. shown.SelectMany(subject => Returned(subject, self))],
             Questions = [.. asked.Select(line => line with { Subject = OneLine.Of(line.Subject), Sentence = OneLine.Sentence(line.Sentence) })],
@@ -81,6 +81,13 @@ public static class BriefBuilder
     ];
 
     private static Severity Worst(BriefSubject subject) => subject.Alerts.Where(IsActive).Max(news => news.Alert.Severity);
+
+    /// <summary>Where there are too many for one brief, the graver reasons are named; in the order of the brief.</summary>
+    private static IEnumerable<BriefSubject> Named(List<BriefSubject> flagged)
+    {
+        var named = flagged.OrderByDescending(Worst).ThenBy(subject => Active(subject).Min(news => RuleTexts.Rank(news.Alert.Key.Rule))).Take(FlaggedAtMost).ToHashSet();
+        return flagged.Where(named.Contains);
+    }
 
     private static FlaggedPerson Flag(BriefSubject subject, ContactRole role, bool self) =>
         new(subject.Person.Id, NameOf(subject.Person, self), Worst(subject), [.. Active(subject).Select(news => Reason(news, role, self))]);

@@ -25,10 +25,18 @@ public static class RuleTexts
     private const string Silence = "silence";
     private const string NotUsable = "not_usable";
 
+    private static readonly string[] Ranks =
+    [
+        LoadRatio, FunctionTestRule.RuleName, StimulusGap, Silence, WeeklyJump, SessionSpike, HardDays, FallingLoad, FallingCapacity, Monotony, NotUsable, StimulusLow,
+    ];
+
     private static readonly string[] Places = [.. RuleBook.All.Select(rule => rule.Name)];
 
     /// <summary>Where a rule stands among the reasons of one person: as in <see cref="RuleBook"/>, any other last.</summary>
     public static int Order(string rule) => Array.IndexOf(Places, rule) is >= 0 and var place ? place : Places.Length;
+
+    /// <summary>Which reasons are named first where a brief cannot name everybody; less is graver. A choice.</summary>
+    public static int Rank(string rule) => Array.IndexOf(Ranks, rule) is >= 0 and var rank ? rank : Ranks.Length;
 
     /// <summary>After a count of people: <c>well above their usual</c>.</summary>
     public static string Counted(FindingKey key) => key.Rule switch
@@ -131,6 +139,7 @@ public static class RuleTexts
     private static string? Pause(string rule, DayPlan plan) => rule switch
     {
         LoadRatio or WeeklyJump or FallingLoad or StimulusGap or StimulusLow or FallingCapacity when plan.IsAwayOrReturning() => "while away or returning",
+        Silence when plan.Absence is not null => "while away",
         FallingLoad when plan.IsLight() => "in light weeks and the off-season",
         _ => null,
     };

@@ -65,7 +65,7 @@ public sealed class AssignedFiles(
         var claims = Attribution.Claims(null, [.. session.Sightings.Of(arrival.Sha).Select(sighting => new SeenName(sighting.Inbox, sighting.Path))], configuration);
         return claims.Count > 0
             ? claims is [var only] && only == arrival.Person
-            : session.Recordings.OfArrival(arrival.Sha).All(recording => OwnsDevice(recording, arrival.Person!));
+            : session.Recordings.OfArrival(arrival.Sha) is { Count: > 0 } recordings && recordings.All(recording => OwnsDevice(recording, arrival.Person!));
     }
 
     /// <summary>A recording's source ends with its device's serial number, where there is one.</summary>

@@ -10,9 +10,12 @@ public static class MeantArrivals
 
     /// <summary>Those whose hash begins with the word, or that were seen under it as a path below an inbox; in order of their hash.</summary>
     public static IReadOnlyList<Arrival> Of(StoreSession session, string word) =>
-        session.Arrivals.All().Where(arrival => IsMeant(session, arrival, word)).ToList();
+    [
+        .. (IsHash(word) ? session.Arrivals.StartingWith(word.ToLowerInvariant()) : [])
+            .Concat(session.Sightings.OfPath(word).Select(sighting => session.Arrivals.Get(sighting.Sha)).OfType<Arrival>())
+            .DistinctBy(arrival => arrival.Sha)
+            .OrderBy(arrival => arrival.Sha, StringComparer.Ordinal),
+    ];
 
-    private static bool IsMeant(StoreSession session, Arrival arrival, string word) =>
-        (word.Length >= FewestDigits && arrival.Sha.StartsWith(word, StringComparison.OrdinalIgnoreCase))
-        || session.Sightings.Of(arrival.Sha).Any(sighting => sighting.Path == word);
+    private static bool IsHash(string word) => word.Length >= FewestDigits && word.All(char.IsAsciiHexDigit);
 }

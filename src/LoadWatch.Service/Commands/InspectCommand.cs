@@ -6,6 +6,7 @@ using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
+using LoadWatch.Rows;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage.Files;
 
@@ -130,8 +131,21 @@ public static class InspectCommand
 
         var file = decoders.Decode(content.Bytes);
         return file.Recordings.Count == 0
-            ? [InspectLine.WithoutRecording(content.Path, file.Kind, file.Problems)]
+            ? [InspectLine.WithoutRecording(content.Path, file.Kind, file.Problems) with { Table = TableText(file.Table) }]
             : file.Recordings.Select(recording => InspectLine.Of(content.Path, file, recording));
+    }
+
+    /// <summary><c>table of sets by layout gym: 120 rows of 12 people, 2026-03-01 to 2026-03-31</c>.</summary>
+    private static string? TableText(DecodedTable? table)
+    {
+        if (table is null)
+        {
+            return null;
+        }
+
+        var people = table.Rows.Select(row => row.Subject).Distinct(StringComparer.OrdinalIgnoreCase).Count(subject => subject is not null);
+        var dates = table.Rows.Count == 0 ? "" : $", {Words.Date(table.Rows.Min(row => row.Date))} to {Words.Date(table.Rows.Max(row => row.Date))}";
+        return $"table of {Words.Of(table.Kind)} by layout {OneLine.Of(table.Layout)}: {table.Rows.Count} rows, people or groups named: {people}{dates}";
     }
 
     private static void WriteJson(StreamWriter output, IEnumerable<InspectLine> lines)
@@ -152,7 +166,7 @@ public static class InspectCommand
     {
         output.Write(line.Part is { } part
             ? FormattableString.Invariant($"{OneLine.Of(line.File)}  part {part}  {OneLine.Of(line.Sport ?? "")}  {line.FirstSample ?? "no date"}  {line.Samples} samples\n")
-            : $"{OneLine.Of(line.File)}  {line.Kind}: no recording\n");
+            : $"{OneLine.Of(line.File)}  {line.Table ?? $"{line.Kind}: no recording"}\n");
         foreach (var (channel, numbers) in line.Channels)
         {
             output.Write(FormattableString.Invariant($"    {channel,-10} {numbers.N,7} readings, mean {numbers.Mean:0.##}, highest {numbers.Max:0.##}\n"));

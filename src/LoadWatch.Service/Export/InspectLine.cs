@@ -28,6 +28,10 @@ public sealed record InspectLine(
     DeviceLine? Device,
     IReadOnlyList<ProblemLine> Problems)
 {
+    /// <summary>What a table holds, in words, for people; null for everything else.</summary>
+    [JsonIgnore]
+    public string? Table { get; init; }
+
     public static InspectLine Of(string path, DecodedFile file, Recording recording) => new(
         path,
         file.Kind,

@@ -26,7 +26,7 @@ public sealed class Answers(WorkingConfiguration configuration, Instant now)
 
         var effects = new DecisionEffects(configuration, session);
         var taken = all.Select(decision => decision.Id).ToHashSet(StringComparer.Ordinal);
-        var gone = told.SelectMany(same => same).Where(decision => !kept.Contains(decision.Id) && HasRows(session, decision.Via!)).ToList();
+        var gone = told.SelectMany(same => same).Where(decision => !kept.Contains(decision.Id) && IsThere(session, decision.Via!)).ToList();
         gone.ForEach(decision => effects.Withdraw(decision, now, decision.Via));
         var made = rows.SelectMany(row => row.Wanted).Count(decision => effects.Make(WithFreeId(decision, taken)));
         return new AnswersReport(made, gone.Count, [.. rows.Select(row => row.Question).OfType<BriefLine>()]);
@@ -57,11 +57,11 @@ public sealed class Answers(WorkingConfiguration configuration, Instant now)
         return new ReadAnswer(row.Date, kept, wanted, question);
     }
 
-    /// <summary>Whether anything is left of the table that told a decision. A version of a table without rows says nothing, so an empty one never means it.</summary>
-    private static bool HasRows(StoreSession session, string via) => Enumerable.Range(0, via.Length)
+    /// <summary>Whether the table that told a decision is still known: one that cannot be read takes nothing back.</summary>
+    private static bool IsThere(StoreSession session, string via) => Enumerable.Range(0, via.Length)
         .Where(at => via[at] == '|')
         .Select(at => via[..at])
-        .Any(table => Decision.ScopeOf(table) is { } scope && session.TableRows.OfScope(scope).Any(row => row.Kind == RowKind.Answers));
+        .Any(table => Decision.ScopeOf(table) is { } scope && session.TableVersions.Applied().Any(version => version.Scope == scope));
 
     /// <summary>A row that went and came back within one moment decides a nanosecond later.</summary>
     private static Decision WithFreeId(Decision decision, HashSet<string> taken)

@@ -60,8 +60,17 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         return new DecodedArrival(content.Sha, file.Kind, verdict, recordings.ToList())
         {
             Table = verdict.State == ArrivalState.Stored ? file.Table : null,
+            Questions = verdict.State == ArrivalState.Stored && file.Table is not null ? RowsNotUsed(file.Problems) : [],
         };
     }
+
+    /// <summary>One question a table, however many of its rows cannot be used.</summary>
+    private static IReadOnlyList<string> RowsNotUsed(IReadOnlyList<Problem> problems) => problems.Count switch
+    {
+        0 => [],
+        1 => [$"1 row is not used: {problems[0]}"],
+        _ => [$"{problems.Count} rows are not used, the first two: {problems[0]}; {problems[1]}"],
+    };
 
     private static List<string> Subjects(DecodedFile file) =>
         [.. file.Recordings.Select(recording => recording.Subject).OfType<string>().Distinct(StringComparer.Ordinal)];
@@ -96,7 +105,6 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         return new DecodedArrival(content.Sha, file.Kind, verdict, recordings)
         {
             Questions = recordings.Count > 0 ? asked : [],
-            From = owned.Count == 0 ? null : owned.Min(one => one.Recording.Start!.Value.InUtc().Date),
         };
     }
 

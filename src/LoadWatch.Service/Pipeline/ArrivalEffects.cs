@@ -20,7 +20,7 @@ public sealed class ArrivalEffects(StoreSession session, ArrivalDecoder decoder)
         }
 
         session.Recordings.RemoveArrival(arrival.Sha);
-        session.Questions.Ask(arrival.Sha, arrival.From, arrival.Questions);
+        session.Questions.Ask(arrival.Sha, arrival.Questions);
 
         session.Arrivals.Settle(arrival.Sha, arrival.Verdict.State, arrival.Kind, arrival.Verdict.Reason, arrival.Verdict.Person);
         if (arrival.Table is { } table)

@@ -145,7 +145,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         .. MissedNotices.Lines(session, contact, Ways(contact), now),
         .. inboxesAway.Select(inbox => new BriefLine(inbox, "this inbox cannot be looked into: nothing comes in from it until its folder is back")),
         .. Files(session, contact),
-        .. new OpenQuestions(configuration).Lines(session, contact, now.InZone(contact.Zone).Date),
+        .. new OpenQuestions(configuration, now).Lines(session, contact, now.InZone(contact.Zone).Date),
         .. contact.People.Count > 0 ? [] : new Answers(configuration, now).Questions(session),
     ];
 
@@ -155,7 +155,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         return session.Arrivals.InState(ArrivalState.Held)
             .Concat(session.Arrivals.InState(ArrivalState.Refused))
             .Select(arrival => (arrival, Sightings: session.Sightings.Of(arrival.Sha)))
-            .Where(item => Concerns(Claims(item.Sightings), contact, people) && (item.arrival.State == ArrivalState.Held || IsRecent(item.Sightings)))
+            .Where(item => Concerns(Claims(item.Sightings), contact, people) && (item.arrival.State == ArrivalState.Held || (IsRecent(item.Sightings) && item.Sightings.Any(sighting => sighting.Latest))))
             .Select(item => new BriefLine(item.Sightings[0].Path, Sentence(item.arrival)))
             .Concat(unreadable.Where(line => Concerns(Attribution.ByFolder([line.Subject], configuration.People), contact, people)).Select(line => line with { Sentence = $"cannot be read: {line.Sentence}" }))
             .OrderBy(line => line.Subject, StringComparer.Ordinal)

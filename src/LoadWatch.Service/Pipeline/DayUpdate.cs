@@ -19,13 +19,16 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
     /// <summary>A later recording settles up to seven earlier days (I-6).</summary>
     private const int SettlingDays = 7;
 
-    private const int PeopleInOneCommit = 50;
+    private const int PeopleInOneCommit = 20;
 
     /// <summary>Recordings of squads are often uploaded two days later.</summary>
     private const int WaitDays = 2;
 
+    private const int QuestionDays = 60;
+
     private TableBasis basis = null!;
     private IReadOnlyDictionary<string, PersonPlan> plans = null!;
+    private IReadOnlyDictionary<string, long> marks = null!;
 
     /// <summary>Dates through which people are computed, by person, where it is not the last date that is over for them.</summary>
     public IReadOnlyDictionary<string, LocalDate> Through { get; init; } = new Dictionary<string, LocalDate>();
@@ -36,6 +39,7 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
         {
             basis = TableBasis.Of(configuration, session);
             plans = new PersonPlans(configuration).Of(session);
+            marks = session.People.Marks();
             var dirty = session.People.Dirty().ToDictionary(item => item.Person, item => item.From, StringComparer.Ordinal);
             return configuration.People.Values
                 .OrderBy(person => person.Id, StringComparer.Ordinal)
@@ -94,9 +98,10 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
             person.Id,
             from,
             through,
+            marks.GetValueOrDefault(person.Id),
             days.Where(day => day.Date >= from).ToList(),
             findings.Where(finding => finding.Date >= from).ToList(),
-            Questions(person, training).Where(question => question.Date >= from).ToList());
+            Questions(person, training).Where(question => question.Date >= through.PlusDays(-QuestionDays)).ToList());
     }
 
     /// <summary>Each session with the load that counts for its day.</summary>
@@ -126,14 +131,14 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
     }
 
     private sealed record ComputedSeries(
-        string Person, LocalDate From, LocalDate Through, IReadOnlyList<Day> Days, IReadOnlyList<Finding> Findings, IReadOnlyList<Question> Questions)
+        string Person, LocalDate From, LocalDate Through, long Marks, IReadOnlyList<Day> Days, IReadOnlyList<Finding> Findings, IReadOnlyList<Question> Questions)
     {
         public void Write(StoreSession session)
         {
             session.Days.Replace(Person, From, Days);
             session.Findings.Replace(Person, From, Findings);
-            session.Questions.Replace(Person, From, Questions);
-            session.People.Computed(Person, Through);
+            session.Questions.Replace(Person, LocalDate.MinIsoValue, Questions);
+            session.People.Computed(Person, Through, Marks);
         }
     }
 }

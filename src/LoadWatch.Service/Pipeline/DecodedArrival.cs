@@ -1,7 +1,6 @@
 using LoadWatch.Activities;
 using LoadWatch.Recordings;
 using LoadWatch.Rows;
-using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
 
@@ -15,9 +14,6 @@ public sealed record DecodedArrival(string Sha, string Kind, ArrivalVerdict Verd
 
     /// <summary>What staff would have to say so that all of it counts.</summary>
     public IReadOnlyList<string> Questions { get; init; } = [];
-
-    /// <summary>The first date (UTC) that questions are about; null without any.</summary>
-    public LocalDate? From { get; init; }
 }
 
 public sealed record ComputedRecording(RecordingSummary Summary, ActivityValues Values);

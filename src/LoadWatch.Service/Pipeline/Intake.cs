@@ -56,7 +56,7 @@ public sealed class Intake(
         KillPoint.Pass("waiting");
         foreach (var piece in Contents(taken.Where(IsHarmless)).InPieces())
         {
-            settlement.Settle(piece, force: false);
+            settlement.Settle(piece, force: false, gone: [], session => RecordNames(session, piece));
         }
 
         KillPoint.Pass("settled");
@@ -70,13 +70,26 @@ public sealed class Intake(
     {
         foreach (var file in taken)
         {
-            session.Arrivals.AddWaiting(file.Copy.Sha, null, file.Copy.Sha, file.Copy.Size);
-            session.Sightings.Upsert(file.File.Inbox.Name, file.File.Path, file.Copy.Sha, now, file.Stamp);
+            // A name stands for "taken": that of a known content comes with its effects, since nothing waits for a restart to take it up.
+            if (session.Arrivals.AddWaiting(file.Copy.Sha, null, file.Copy.Sha, file.Copy.Size) || !IsHarmless(session, file))
+            {
+                session.Sightings.Upsert(file.File.Inbox.Name, file.File.Path, file.Copy.Sha, now, file.Stamp);
+            }
         }
     }
 
-    private bool IsHarmless(TakenFile file) =>
-        store.Read(session => session.Arrivals.Get(file.Copy.Sha)) is not { } known || !Recovery.IsPoisonous(known);
+    private static void RecordNames(StoreSession session, IReadOnlyList<SeenContent> piece)
+    {
+        foreach (var (content, origin) in piece.Where(seen => seen.Content.ParentSha is null))
+        {
+            session.Sightings.Upsert(origin!.Inbox, content.Path, content.Sha, origin.FirstSeen, origin.Stamp);
+        }
+    }
+
+    private bool IsHarmless(TakenFile file) => store.Read(session => IsHarmless(session, file));
+
+    private static bool IsHarmless(StoreSession session, TakenFile file) =>
+        session.Arrivals.Get(file.Copy.Sha) is not { } known || !Recovery.IsPoisonous(known);
 
     private IEnumerable<SeenContent> Contents(IEnumerable<TakenFile> taken) =>
         taken.SelectMany(file => ArrivalContent.Expand(decoders, file.Copy.Sha, file.File.Path, file.Copy.Bytes)

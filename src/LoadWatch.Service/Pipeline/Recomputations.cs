@@ -10,8 +10,6 @@ namespace LoadWatch.Service.Pipeline;
 /// <summary>Computes recordings again that changed rows of tables bear on: a planned session was moved, a reference value was measured.</summary>
 public sealed class Recomputations(Store store, Archive archive, ArchiveReader reader, Settlement settlement)
 {
-    private static readonly LocalDate FirstDate = new(1, 1, 1);
-
     public void Run(CancellationToken cancel)
     {
         var asked = store.Read(session => session.Recomputations.All());
@@ -37,7 +35,8 @@ public sealed class Recomputations(Store store, Archive archive, ArchiveReader r
     private static List<LoadWatch.Storage.Recordings.Arrival> Concerned(StoreSession session, IReadOnlyList<Recomputation> asked) =>
     [
         .. asked
-            .SelectMany(one => session.Recordings.OfPerson(one.Person).Where(recording => IsNear(recording.Date, one)))
+            .GroupBy(one => one.Person, StringComparer.Ordinal)
+            .SelectMany(those => session.Recordings.OfPerson(those.Key).Where(recording => those.Any(one => IsNear(recording.Date, one))))
             .Select(recording => recording.Sha)
             .Concat(asked.Any(IsOpen) ? LeftOut(session) : [])
             .Distinct(StringComparer.Ordinal)
@@ -54,5 +53,5 @@ public sealed class Recomputations(Store store, Archive archive, ArchiveReader r
     /// <summary>Held contents, and those of which a part is left out: by another reference value they may be their owner's.</summary>
     private static IEnumerable<string> LeftOut(StoreSession session) => session.Arrivals.InState(ArrivalState.Held)
         .Select(arrival => arrival.Sha)
-        .Concat(session.Questions.OfContentsSince(FirstDate).Select(question => question.Sha));
+        .Concat(session.Questions.OfContents().Select(question => question.Sha));
 }

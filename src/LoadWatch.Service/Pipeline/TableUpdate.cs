@@ -5,8 +5,9 @@ using NodaTime;
 namespace LoadWatch.Service.Pipeline;
 
 /// <summary>
-/// A version of a table on top of the rows that stood before it. It speaks for the dates from its first row's on, or for all: there its rows replace, correct
-/// and retract. Older rows stay, and a version without rows says nothing. Pure.
+/// A version of a table on top of the rows that stood before it. It speaks for the dates from its first row's on, one of a folder for those up to its last row's
+/// (an older file may come late), or for all: there its rows replace, correct and retract. Other rows stay. One without rows takes back all where it speaks for
+/// everything, else it says nothing. Pure.
 /// </summary>
 public static class TableUpdate
 {
@@ -18,17 +19,18 @@ public static class TableUpdate
     {
         if (table.Rows.Count == 0)
         {
-            return before;
+            return table.CoversEverything ? [.. before.Where(row => row.Kind != table.Kind)] : before;
         }
 
         var from = table.CoversEverything ? LocalDate.MinIsoValue : table.Rows.Min(row => row.Date);
+        var to = table is { CoversEverything: false, IsNamedByFolder: true } ? table.Rows.Max(row => row.Date) : LocalDate.MaxIsoValue;
         var known = before.ToDictionary(Identity);
         var said = table.Rows
             .Select(row => new StoredRow(
                 version.Scope, table.Kind, table.Layout, row.Subject ?? "", personOf(row), row.Date, row.Key, version.Since, row.Content))
             .Select(row => known.TryGetValue(Identity(row), out var same) && SayTheSame(row, same) ? same : row)
             .ToDictionary(Identity);
-        return [.. before.Where(row => (row.Kind != table.Kind || row.Date < from) && !said.ContainsKey(Identity(row))), .. said.Values];
+        return [.. before.Where(row => (row.Kind != table.Kind || row.Date < from || row.Date > to) && !said.ContainsKey(Identity(row))), .. said.Values];
     }
 
     private static (RowKind Kind, string Subject, string Key) Identity(StoredRow row) => (row.Kind, row.Subject, row.Key);

@@ -6,19 +6,25 @@ namespace LoadWatch.Storage.People;
 public sealed class PersonStateTable
 {
     private const string Mark = """
-        INSERT INTO person_state (person, dirty_from) VALUES (@person, @from)
-        ON CONFLICT (person) DO UPDATE SET dirty_from = excluded.dirty_from
-        WHERE person_state.dirty_from IS NULL OR person_state.dirty_from > excluded.dirty_from
+        INSERT INTO person_state (person, dirty_from, marks) VALUES (@person, @from, 1)
+        ON CONFLICT (person) DO UPDATE SET
+            dirty_from = CASE
+                WHEN person_state.dirty_from IS NULL OR person_state.dirty_from > excluded.dirty_from THEN excluded.dirty_from
+                ELSE person_state.dirty_from END,
+            marks = person_state.marks + 1
         """;
 
     private const string SelectDirty = "SELECT person, dirty_from FROM person_state WHERE dirty_from IS NOT NULL ORDER BY person";
 
     private const string Clear = """
         INSERT INTO person_state (person, computed_to) VALUES (@person, @through)
-        ON CONFLICT (person) DO UPDATE SET dirty_from = NULL, computed_to = excluded.computed_to
+        ON CONFLICT (person) DO UPDATE SET
+            dirty_from = CASE WHEN person_state.marks = @marks THEN NULL ELSE person_state.dirty_from END, computed_to = excluded.computed_to
         """;
 
     private const string SelectComputed = "SELECT computed_to FROM person_state WHERE person = @person AND computed_to IS NOT NULL";
+
+    private const string SelectMarks = "SELECT person, marks FROM person_state";
 
     private readonly StoreSession session;
 
@@ -30,11 +36,23 @@ public sealed class PersonStateTable
     /// <summary>Whose days are to be computed again, sorted by person.</summary>
     public IReadOnlyList<DirtyPerson> Dirty() => session.Rows<Row>(SelectDirty).ConvertAll(row => new DirtyPerson(row.Person, row.DirtyFrom));
 
-    /// <summary>Notes that a person's days are computed through a date, none of them dirty.</summary>
-    public void Computed(string person, LocalDate through) => session.Execute(Clear, new { person, through });
+    /// <summary>How often each person's days were asked for; who was never is absent.</summary>
+    public IReadOnlyDictionary<string, long> Marks() =>
+        session.Rows<MarksRow>(SelectMarks).ToDictionary(row => row.Person, row => row.Marks, StringComparer.Ordinal);
+
+    /// <summary>Notes that a person's days are computed through a date. They stay dirty where somebody asked for them since their inputs were read.</summary>
+    /// <param name="marks">Of the person when the inputs were read; 0 where there were none.</param>
+    public void Computed(string person, LocalDate through, long marks) => session.Execute(Clear, new { person, through, marks });
 
     /// <summary>The last date computed, or null before any.</summary>
     public LocalDate? ComputedTo(string person) => session.Row<Row>(SelectComputed, new { person })?.ComputedTo;
+
+    private sealed class MarksRow
+    {
+        public string Person { get; init; } = "";
+
+        public long Marks { get; init; }
+    }
 
     private sealed class Row
     {

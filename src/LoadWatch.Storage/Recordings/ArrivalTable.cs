@@ -18,6 +18,7 @@ public sealed class ArrivalTable
     private const string SelectWaiting = $"SELECT {Columns} FROM arrival WHERE state = 'waiting' ORDER BY sha";
     private const string SelectInState = $"SELECT {Columns} FROM arrival WHERE state = @state ORDER BY sha";
     private const string SelectAll = $"SELECT {Columns} FROM arrival ORDER BY sha";
+    private const string SelectStarting = $"SELECT {Columns} FROM arrival WHERE sha >= @digits AND sha < @beyond ORDER BY sha";
     private const string Count = "SELECT state, COUNT(*) AS number FROM arrival GROUP BY state";
     private const string Update = "UPDATE arrival SET state = @state, kind = @kind, reason = @reason, person = @person WHERE sha = @sha";
     private const string AddAttempt = "UPDATE arrival SET attempts = attempts + 1 WHERE sha = @sha";
@@ -39,6 +40,11 @@ public sealed class ArrivalTable
     /// <summary>Every arrival in a state, sorted by content. What every sweep looks at asks for this, so that its cost does not grow with the stored ones.</summary>
     public IReadOnlyList<Arrival> InState(ArrivalState state) =>
         session.Rows<Row>(SelectInState, new { state = Words<ArrivalState>.Of(state) }).ConvertAll(row => row.ToArrival());
+
+    /// <summary>Arrivals whose hash begins with the digits, sorted by content.</summary>
+    /// <param name="digits">Lower-case hex digits.</param>
+    public IReadOnlyList<Arrival> StartingWith(string digits) =>
+        session.Rows<Row>(SelectStarting, new { digits, beyond = digits + "g" }).ConvertAll(row => row.ToArrival());
 
     /// <summary>Every arrival, sorted by content.</summary>
     public IReadOnlyList<Arrival> All() => Select(SelectAll);

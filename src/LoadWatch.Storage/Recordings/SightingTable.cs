@@ -20,6 +20,7 @@ public sealed class SightingTable
 
     private const string Delete = "DELETE FROM sighting WHERE inbox = @Inbox AND path = @Path AND sha = @Sha";
     private const string SelectLatest = $"SELECT {Columns} FROM sighting WHERE inbox = @inbox AND latest = 1";
+    private const string SelectOfPath = $"SELECT {Columns} FROM sighting WHERE path = @path";
     private const string SelectOf = $"SELECT {Columns} FROM sighting WHERE sha = @sha";
 
     private readonly StoreSession session;
@@ -39,6 +40,9 @@ public sealed class SightingTable
 
     /// <summary>Drops a name that a content no longer has.</summary>
     public void Forget(Sighting sighting) => session.Execute(Delete, new { sighting.Inbox, sighting.Path, sighting.Sha });
+
+    /// <summary>Every content that was seen under a name, in whatever inbox.</summary>
+    public IReadOnlyList<Sighting> OfPath(string path) => session.Rows<Row>(SelectOfPath, new { path }).ConvertAll(row => row.ToSighting());
 
     /// <summary>Every name of a content, sorted by path and inbox, ordinally: the first is the one shown (I-5).</summary>
     public IReadOnlyList<Sighting> Of(string sha) =>

@@ -6,7 +6,7 @@ namespace LoadWatch.Storage.Rows;
 public sealed record Question(string Person, LocalDate Date, string Sentence);
 
 /// <summary>Something about a content that only staff can settle.</summary>
-public sealed record ContentQuestion(string Sha, LocalDate Date, string Sentence);
+public sealed record ContentQuestion(string Sha, string Sentence);
 
 /// <summary>Tables <c>question</c> and <c>content_question</c>: what came out open when days were computed and contents were settled.</summary>
 public sealed class QuestionTable
@@ -16,8 +16,8 @@ public sealed class QuestionTable
     private const string SelectSince = "SELECT person, date, sentence FROM question WHERE date >= @from ORDER BY person, date, sentence";
 
     private const string DeleteOfContent = "DELETE FROM content_question WHERE sha = @sha";
-    private const string InsertOfContent = "INSERT INTO content_question (sha, date, sentence) VALUES (@sha, @date, @sentence)";
-    private const string SelectOfContents = "SELECT sha, date, sentence FROM content_question WHERE date >= @from ORDER BY sha, date, sentence";
+    private const string InsertOfContent = "INSERT INTO content_question (sha, sentence) VALUES (@sha, @sentence)";
+    private const string SelectOfContents = "SELECT sha, sentence FROM content_question ORDER BY sha, sentence";
 
     private readonly StoreSession session;
 
@@ -31,16 +31,14 @@ public sealed class QuestionTable
     }
 
     /// <summary>Stores the questions about a content in place of all of it.</summary>
-    /// <param name="date">Null without questions.</param>
-    public void Ask(string sha, LocalDate? date, IReadOnlyList<string> sentences)
+    public void Ask(string sha, IReadOnlyList<string> sentences)
     {
         session.Execute(DeleteOfContent, new { sha });
-        session.ExecuteEach(InsertOfContent, sentences.Select(sentence => new { sha, date, sentence }));
+        session.ExecuteEach(InsertOfContent, sentences.Select(sentence => new { sha, sentence }));
     }
 
-    /// <summary>Questions about contents of dates from one on, sorted by content, date and sentence.</summary>
-    public IReadOnlyList<ContentQuestion> OfContentsSince(LocalDate from) =>
-        session.Rows<ContentRow>(SelectOfContents, new { from }).ConvertAll(row => new ContentQuestion(row.Sha, row.Date, row.Sentence));
+    /// <summary>Every question about a content, sorted by content and sentence.</summary>
+    public IReadOnlyList<ContentQuestion> OfContents() => session.Rows<ContentRow>(SelectOfContents).ConvertAll(row => new ContentQuestion(row.Sha, row.Sentence));
 
     /// <summary>Everybody's questions of dates from one on, sorted by person, date and sentence.</summary>
     public IReadOnlyList<Question> Since(LocalDate from) =>
@@ -49,8 +47,6 @@ public sealed class QuestionTable
     private sealed class ContentRow
     {
         public string Sha { get; init; } = "";
-
-        public LocalDate Date { get; init; }
 
         public string Sentence { get; init; } = "";
     }

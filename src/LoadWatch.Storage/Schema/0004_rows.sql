@@ -36,7 +36,6 @@ CREATE TABLE question (
 ;
 CREATE TABLE content_question (
     sha TEXT NOT NULL REFERENCES arrival (sha),
-    date TEXT NOT NULL,
     sentence TEXT NOT NULL,
     PRIMARY KEY (sha, sentence)
 )
@@ -48,6 +47,8 @@ CREATE TABLE recomputation (
     PRIMARY KEY (person, from_date, to_date)
 )
 ;
+CREATE INDEX sighting_path ON sighting (path)
+;
 CREATE INDEX table_row_person ON table_row (person, kind, date)
 ;
 CREATE INDEX table_row_kind ON table_row (kind, date)
@@ -55,6 +56,8 @@ CREATE INDEX table_row_kind ON table_row (kind, date)
 ALTER TABLE sighting ADD COLUMN since TEXT
 ;
 UPDATE sighting SET since = first_seen
+;
+ALTER TABLE person_state ADD COLUMN marks BIGINT NOT NULL DEFAULT 0
 ;
 ALTER TABLE day ADD COLUMN plan TEXT NOT NULL DEFAULT '{}'
 ;

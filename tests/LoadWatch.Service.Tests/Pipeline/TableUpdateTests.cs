@@ -49,7 +49,24 @@ public class TableUpdateTests
     {
         var rows = TableUpdate.Apply([], Version(0), Table(Row(0, 5)), _ => "anna");
 
-        Assert.Same(rows, TableUpdate.Apply(rows, Version(1), Table() with { CoversEverything = true }, _ => "anna"));
+        Assert.Same(rows, TableUpdate.Apply(rows, Version(1), Table(), _ => "anna"));
+    }
+
+    [Fact]
+    public void AnEditedTableThatWasEmptiedTakesEverythingBack()
+    {
+        var rows = TableUpdate.Apply([], Version(0), Table(Row(0, 5)), _ => "anna");
+
+        Assert.Empty(TableUpdate.Apply(rows, Version(1), Table() with { CoversEverything = true }, _ => "anna"));
+    }
+
+    [Fact]
+    public void AnOlderFileOfAFolderThatComesLateTakesNothingBackBehindIt()
+    {
+        var rows = TableUpdate.Apply([], Version(0), Table(Row(7, 5), Row(8, 5)) with { IsNamedByFolder = true }, _ => "anna");
+        rows = TableUpdate.Apply(rows, Version(1), Table(Row(0, 5), Row(1, 5)) with { IsNamedByFolder = true }, _ => "anna");
+
+        Assert.Equal([0, 1, 7, 8], rows.Select(DayOf).Order());
     }
 
     [Fact]

@@ -24,7 +24,7 @@ public sealed class PersonStateTableTests(SharedFolder shared) : StoreTest(share
         Mark("anna", 1);
         Assert.Null(Store.Read(session => session.People.ComputedTo("anna")));
 
-        Store.Write(session => session.People.Computed("anna", Some.Date.PlusDays(9)));
+        Store.Write(session => session.People.Computed("anna", Some.Date.PlusDays(9), session.People.Marks()["anna"]));
         Assert.Empty(Store.Read(session => session.People.Dirty()));
 
         Mark("anna", 5);
