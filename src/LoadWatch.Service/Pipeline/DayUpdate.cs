@@ -1,8 +1,6 @@
 using LoadWatch.Activities;
 using LoadWatch.Days;
 using LoadWatch.Findings;
-using LoadWatch.Loads;
-using LoadWatch.Notices;
 using LoadWatch.People;
 using LoadWatch.Plans;
 using LoadWatch.Rows;
@@ -70,41 +68,15 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
         var (training, tests) = store.Read(session => (
             PersonTraining.Of(session, configuration, basis, person),
             session.TableRows.OfPerson(person.Id, RowKind.Tests).Select(row => new DatedTest(row.Date, (TestRow)row.Content)).ToList()));
-        var activities = training.Activities.Where(activity => activity.Date <= through).ToList();
-        var plan = plans[person.Id];
-        var counted = Counted(person, group.LoadQuantity, group.LoadFallbacks, activities);
-        var days = LoadCalendar.Build(person.Id, counted, through, plan);
-        var findings = RuleBook.Evaluate(new RuleSubject(person, days, group.Limits)
-        {
-            LoadUnit = LoadUnits.Of(group.LoadQuantity),
-            LoadQuantity = group.LoadQuantity,
-            SessionLoads = counted.ToDictionary(activity => activity.Key, activity => activity.Load, StringComparer.Ordinal),
-            Activities = activities,
-            Plan = plan,
-            Tests = tests.FindAll(test => test.Date <= through),
-            Series = group.Limits.Quantities.ToDictionary(
-                name => name, name => new QuantitySeries(name, LoadUnits.Of(name), Days(person, name, [], activities, through, plan)), StringComparer.Ordinal),
-        });
+        var series = PersonSeries.Of(person, group, training.Activities, tests, plans[person.Id], through);
         return new ComputedSeries(
             person.Id,
             from,
             through,
-            days.Where(day => day.Date >= from).ToList(),
-            findings.Where(finding => finding.Date >= from).ToList(),
+            series.Days.Where(day => day.Date >= from).ToList(),
+            series.Findings.Where(finding => finding.Date >= from).ToList(),
             Questions(person, training).Where(question => question.Date >= from).ToList());
     }
-
-    /// <summary>Each session with the load that counts for its day.</summary>
-    private static List<ActivityOnDay> Counted(Person person, string quantity, IReadOnlyList<string> fallbacks, List<JoinedActivity> activities)
-    {
-        var order = new LoadOrder(quantity, fallbacks, activities.ConvertAll(Loads), person.HeartRateIsValidOn);
-        return activities.ConvertAll(activity => OnDay(activity, order));
-    }
-
-    private static SessionLoads Loads(JoinedActivity activity) => new(activity.Date, activity.Quantities);
-
-    private static ActivityOnDay OnDay(JoinedActivity activity, LoadOrder order) => new(
-        activity.Key, activity.Date, activity.Sources, order.Choose(Loads(activity))?.Value, activity.Stimulus, activity.AddsLoad);
 
     /// <summary>An exercise of a set log that has no body region is asked about with the date of the last session.</summary>
     private static IEnumerable<Question> Questions(Person person, JoinResult training)

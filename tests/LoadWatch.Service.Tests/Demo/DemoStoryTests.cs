@@ -1,8 +1,5 @@
-using LoadWatch.Activities;
 using LoadWatch.Days;
-using LoadWatch.Findings;
 using LoadWatch.Loads;
-using LoadWatch.People;
 using LoadWatch.Service.Demo;
 using NodaTime;
 
@@ -29,39 +26,31 @@ public class DemoStoryTests
 
     private static void AssertStory(int seed, LocalDate until)
     {
-        var ends = DemoCast.All.AsParallel().AsOrdered().Select(part => End.Of(part, seed, until)).ToList();
-        Assert.Equal(DemoStory.Alerts, ends.SelectMany(end => end.Alerts).OrderBy(alert => alert.Person, StringComparer.Ordinal));
+        var ends = new DemoLife(seed, until).Ends.ToList();
+        var alerts = ends.SelectMany(end => end.Alerts).OrderBy(alert => alert.Person, StringComparer.Ordinal).ThenBy(alert => alert.Rule, StringComparer.Ordinal);
+        Assert.Equal(string.Join('\n', DemoStory.Alerts), string.Join('\n', alerts));
         Assert.All(ends.Where(end => end.Part.Plot == DemoPlot.RampUp), end => Assert.InRange(end.Day.RatioUncoupled!.Value, 2.0, 2.8));
         Assert.All(ends.Where(end => end.Part.Plot == DemoPlot.Usual), end => Assert.InRange(end.Day.RatioUncoupled ?? 1, 0.6, RatioOfUsualPeople));
         Assert.All(ends.Where(end => end.Part.Plot == DemoPlot.StrapFailed), end => Assert.Null(end.Day.Chronic));
+        AssertTables(ends);
     }
 
-    /// <summary>The last date of one person.</summary>
-    private sealed record End(DemoPart Part, Day Day, IReadOnlyList<DemoAlert> Alerts)
+    /// <summary>Sets are readable to the full, every rated recording has its rating, and two ratings are asked about.</summary>
+    private static void AssertTables(IReadOnlyList<DemoEnd> ends)
     {
-        public static End Of(DemoPart part, int seed, LocalDate until)
-        {
-            var person = DemoPerson.Draw(part, seed, until);
-            var days = Days(person, seed, until);
-            var alerts = RuleBook.Evaluate(new RuleSubject(person.Person, days, new RuleLimits()))
-                .Where(finding => finding.Date == until.PlusDays(-1))
-                .Select(finding => new DemoAlert(finding.Person, finding.Rule, finding.Region, finding.Severity));
-            return new End(part, days[^1], [.. alerts]);
-        }
-    }
+        var classes = ends.Where(end => end.Part.Group == DemoCast.Class).SelectMany(end => end.Training.Activities).ToList();
+        Assert.All(classes, session => Assert.NotNull(session[QuantityNames.Sets]));
+        Assert.All(classes.SelectMany(session => session.Stimulus), region => Assert.NotNull(region.HardRepetitions ?? region.HardBouts));
+        Assert.All(ends, end => Assert.Empty(end.Training.UnknownExercises));
 
-    private static IReadOnlyList<Day> Days(DemoPerson person, int seed, LocalDate until)
-    {
-        var anchors = new AnchorBook(person.Anchors);
-        var activities = DemoSessions.Of(person, seed, until).Select(activity => OnDay(person, anchors, DemoRecording.Of(activity))).ToList();
-        return LoadCalendar.Build(person.Part.Id, activities, until.PlusDays(-1));
-    }
+        var questions = ends.SelectMany(end => end.Training.Questions.Select(question => $"{end.Part.Id}: {question.Sentence}")).ToList();
+        Assert.Collection(
+            questions,
+            question => Assert.StartsWith("eero: a rating of 6 of ", question, StringComparison.Ordinal),
+            question => Assert.StartsWith("helmi: a rating of 4 of ", question, StringComparison.Ordinal));
 
-    private static ActivityOnDay OnDay(DemoPerson person, AnchorBook anchors, Recordings.Recording recording)
-    {
-        var values = ActivityComputation.Compute(recording, person.Person, anchors, new ComputationSettings());
-        var load = values.Quantities.SingleOrDefault(quantity => quantity.Name == QuantityNames.BanisterTrimp)?.Value;
-        var start = LocalStart.Of(recording, person.Person);
-        return new ActivityOnDay(start.ToInstant().ToString(), start.Date, ["device"], load, values.Stimulus);
+        var rows = ends.Where(end => end.Part.Group == DemoCast.Boat).SelectMany(end => end.Training.Activities).ToList();
+        Assert.Equal(rows.Count - 2, rows.Count(session => session[QuantityNames.FosterLoad] is > 0));
+        Assert.Equal(rows.Count, rows.Count(session => session.UsableShare.Count > 0));
     }
 }
