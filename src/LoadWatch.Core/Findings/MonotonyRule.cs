@@ -61,11 +61,12 @@ public sealed class MonotonyRule : IRule
 
     private static string Sentence(LocalDate date, LocalDate since, EvenWeek read, MonotonyLimits limits, string unit)
     {
-        var numbers = $"monotony {Wording.Ratio(read.Monotony, limits.Raise)}, {Wording.Number(read.Acute)} {unit} against {Wording.Number(read.Usual)} in the usual week";
+        var varies = read.Date == date ? "varies" : "varied";
+        var numbers = $"monotony {Wording.Ratio(read.Monotony, limits.Raise)}, {Wording.Number(read.Acute)} against {Wording.Number(read.Usual)} {unit}";
         var limit = read.Monotony > limits.Raise
             ? $"the limit is {Wording.Limit(limits.Raise)}, passed since {Wording.Date(since, date)}"
             : $"it passed the limit of {Wording.Limit(limits.Raise)} on {Wording.Date(since, date)} and returns below {Wording.Limit(limits.Return)}";
-        return $"Load of the last 7 days {Wording.Is(read.Date, date)} heavy with little variation ({numbers}){Wording.NotKnownSince(read.Date, date)}; {limit}.";
+        return $"Load of the last 7 days {varies} little at more than the usual week ({numbers}){Wording.NotKnownSince(read.Date, date)}; {limit}.";
     }
 
     private static Evidence Basis(EvenWeek read, MonotonyLimits limits, string unit) => new(

@@ -20,18 +20,20 @@ public static class BriefBuilder
         var shown = Shown(contact, subjects);
         var self = contact.Role == ContactRole.Self && shown.Count == 1;
         var upTo = shown.Where(subject => subject.Days.Count > 0).Max(subject => (LocalDate?)subject.Days[^1].Date);
-        var flagged = shown.Where(ToLookAt).OrderByDescending(Worst).ToList();
+        var silent = CommonSilence.Of(shown);
+        var flagged = shown.Where(subject => ToLookAt(subject) && !(silent.Contains(subject) && CommonSilence.IsOnlySilent(subject))).OrderByDescending(Worst).ToList();
+        var asked = CommonSilence.Lines(shown, silent).Concat(questions).ToList();
         return new Brief
         {
             ContactId = contact.Id,
             ContactName = OneLine.Of(contact.Name),
             Date = date,
             DataUpTo = upTo,
-            FirstLine = FirstLine.Of(shown, flagged, upTo, questions, self),
+            FirstLine = FirstLine.Of(shown, flagged, upTo, asked, self),
             Flagged = [.. flagged.Take(FlaggedAtMost).Select(subject => Flag(subject, contact.Role, self))],
             FlaggedBeyond = Math.Max(0, flagged.Count - FlaggedAtMost),
             Returned = [.. shown.SelectMany(subject => Returned(subject, self))],
-            Questions = [.. questions.Select(line => line with { Subject = OneLine.Of(line.Subject), Sentence = OneLine.Sentence(line.Sentence) })],
+            Questions = [.. asked.Select(line => line with { Subject = OneLine.Of(line.Subject), Sentence = OneLine.Sentence(line.Sentence) })],
             Groups = Groups(contact, shown, upTo ?? date.PlusDays(-1), self),
         };
     }
@@ -109,14 +111,14 @@ public static class BriefBuilder
             .GroupBy(subject => subject.Group.Id, StringComparer.Ordinal)
             .OrderBy(group => Place(contact.Groups, group.Key))
             .ThenBy(group => group.Key, StringComparer.Ordinal)
-            .Select(group => Table(group.First().Group, group, upTo, self)),
+            .Select(group => Table(group.First().Group, group, upTo, RoleView.Of(contact.Role, shown.Count), self)),
     ];
 
-    private static BriefGroup Table(Group group, IEnumerable<BriefSubject> members, LocalDate upTo, bool self) => new(
+    private static BriefGroup Table(Group group, IEnumerable<BriefSubject> members, LocalDate upTo, RoleView view, bool self) => new(
         group.Id,
         OneLine.Of(group.Name),
         LoadUnits.Of(group.LoadQuantity),
-        [.. members.Select(member => BriefRows.Of(member, upTo, self))]);
+        [.. members.Select(member => BriefRows.Of(member, upTo, view, self))]);
 
     private static int Place(IReadOnlyList<string> order, string id)
     {

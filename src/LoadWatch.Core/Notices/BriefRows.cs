@@ -1,3 +1,4 @@
+using System.Globalization;
 using LoadWatch.Alerts;
 using LoadWatch.Days;
 using LoadWatch.Stimulus;
@@ -14,8 +15,9 @@ internal static class BriefRows
     private const int WeekDays = 7;
     private const int RemarksShown = 2;
 
+    /// <param name="view">What the reader may be told of somebody's health.</param>
     /// <param name="upTo">The last date of the brief; dates without a day are unknown.</param>
-    public static BriefRow Of(BriefSubject subject, LocalDate upTo, bool self)
+    public static BriefRow Of(BriefSubject subject, LocalDate upTo, RoleView view, bool self)
     {
         var days = subject.Days.ToDictionary(day => day.Date);
         var today = days.GetValueOrDefault(upTo);
@@ -34,7 +36,7 @@ internal static class BriefRows
             EverHeavy(days, upTo, legs) ? legs?.DaysSince : null,
             legs?.Days28,
             [.. Enumerable.Range(1 - StripDays, StripDays).Select(offset => Strip(days, upTo.PlusDays(offset)))],
-            Remark(subject, today, back, known, NeverHeavy(days, upTo, legs)));
+            Remark(subject, [.. Absent(days, upTo, view), .. Own(subject, today, back, known, NeverHeavy(days, upTo, legs))]));
     }
 
     private static BriefDay Strip(Dictionary<LocalDate, Day> days, LocalDate date)
@@ -61,14 +63,31 @@ internal static class BriefRows
         return start.Regions.GetValueOrDefault(BodyRegion.Legs)?.HeavyOrFast == true ? null : since;
     }
 
-    private static string? Remark(BriefSubject subject, Day? today, ReturnPhase? back, int knownOf7, int? neverHeavyDays)
+    private static string? Remark(BriefSubject subject, IReadOnlyList<string> own)
     {
         var given = subject.Remarks.Select(OneLine.Of).Where(remark => remark.Length > 0).Distinct(StringComparer.Ordinal).ToList();
-        var all = Own(subject, today, back, knownOf7, neverHeavyDays)
+        var all = own
             .Concat(given.Take(RemarksShown))
             .Concat(given.Count > RemarksShown ? [$"{given.Count - RemarksShown} more of the kind"] : Array.Empty<string>());
         var remark = string.Join("; ", all);
         return remark.Length == 0 ? null : remark;
+    }
+
+    /// <summary><c>away since 2 March</c>.</summary>
+    private static IEnumerable<string> Absent(Dictionary<LocalDate, Day> days, LocalDate upTo, RoleView view)
+    {
+        if (days.GetValueOrDefault(upTo)?.Plan.Absence is not { } absence)
+        {
+            yield break;
+        }
+
+        var since = upTo;
+        while (days.GetValueOrDefault(since.PlusDays(-1))?.Plan.Absence == absence)
+        {
+            since = since.PlusDays(-1);
+        }
+
+        yield return $"{view.Word(absence)} since {since.ToString("d MMMM", CultureInfo.InvariantCulture)}";
     }
 
     private static IEnumerable<string> Own(BriefSubject subject, Day? today, ReturnPhase? back, int knownOf7, int? neverHeavyDays)

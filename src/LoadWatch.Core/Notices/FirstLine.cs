@@ -1,3 +1,4 @@
+using System.Globalization;
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
 using NodaTime;
@@ -18,6 +19,7 @@ internal static class FirstLine
         {
             self ? OfOne(shown[0], flagged.Count > 0) : OfMany(shown.Count, flagged),
             SeenEarlier(shown, self),
+            Planned(shown, upTo, self),
             Unseen(shown, upTo, self),
             Questions(questions.Count(line => !line.OfDelivery)),
             questions.Any(line => line.OfDelivery) ? "Notices did not get through." : null,
@@ -44,6 +46,11 @@ internal static class FirstLine
         .ThenBy(group => group.First().Region)
         .ThenBy(group => group.Key, StringComparer.Ordinal)
         .Select(group => $"{group.Count()} {group.Key}");
+
+    private static string? Planned(IReadOnlyList<BriefSubject> shown, LocalDate? upTo, bool self) =>
+        !self && upTo is { } last && PlannedPresence.Of(shown, last) is { } session
+            ? $"{session.In} of {session.Expected} recordings of the session of {session.Date.ToString("d MMMM", CultureInfo.InvariantCulture)} are in."
+            : null;
 
     private static string? SeenEarlier(IReadOnlyList<BriefSubject> shown, bool self)
     {
@@ -74,8 +81,8 @@ internal static class FirstLine
     private static string? Questions(int count) => count switch
     {
         0 => null,
-        1 => "1 file needs an answer.",
-        _ => $"{count} files need an answer.",
+        1 => "1 question needs an answer.",
+        _ => $"{count} questions need an answer.",
     };
 
     private static string People(int count) => count == 1 ? "1 person" : $"{count} people";

@@ -38,10 +38,14 @@ public sealed class AssignedFiles(
     private List<Arrival> Waiting(StoreSession session) => session.Decisions.Assigned().Values
         .OrderBy(decision => decision.Subject, StringComparer.Ordinal)
         .Select(decision => (Arrival: session.Arrivals.Get(decision.Subject), Owner: configuration.People.GetValueOrDefault(decision.Person)))
-        .Where(item => item is { Owner: { } owner, Arrival: { State: ArrivalState.Stored or ArrivalState.Held } arrival } && arrival.Person != owner.Id)
+        .Where(item => item is { Owner: { } owner, Arrival: { State: ArrivalState.Stored or ArrivalState.Held } arrival } && arrival.Person != owner.Id && !IsOfSeveral(session, arrival))
         .Select(item => item.Arrival!)
         .Concat(Withdrawn(session))
         .ToList();
+
+    /// <summary>Its recordings are those whom the file names, whatever was decided before that was known.</summary>
+    private static bool IsOfSeveral(StoreSession session, Arrival arrival) =>
+        arrival is { State: ArrivalState.Stored, Person: null } && session.Recordings.OfArrival(arrival.Sha).Count > 0;
 
     private IEnumerable<Arrival> Withdrawn(StoreSession session) => session.Decisions.AssignedNoMore()
         .OrderBy(pair => pair.Key, StringComparer.Ordinal)

@@ -38,15 +38,15 @@ public static class DemoStory
 
     private static string? Line(DemoPart part) => part.Plot switch
     {
-        DemoPlot.RampUp => $"{part.Name} rows twice a day in the last week: more than twice the usual week, and one day like the other.",
+        DemoPlot.RampUp => $"{part.Name} rows twice a day in the last week: more than twice the usual week, and every day as hard as the next.",
         DemoPlot.EasyOnly => $"{part.Name} has only rowed easily for more than two weeks: no heavy or fast work of the legs. The coach has seen it.",
         DemoPlot.ArmsForWeeks => $"{part.Name} has trained arms only for more than three weeks: no heavy leg work.",
         DemoPlot.ArmsForDays => $"{part.Name} has trained arms only for nearly two weeks.",
         DemoPlot.StrapFailed => $"{part.Name}'s strap gives no heart rate for three weeks: no load rather than a wrong one, and a word about the strap.",
         DemoPlot.SilentNineDays => $"{part.Name} sends nothing for nine days: two and more of the squad's planned rows without a recording.",
-        DemoPlot.SilentTwoWeeks => $"{part.Name} is on holiday, and nobody was told: four planned classes missed.",
+        DemoPlot.SilentTwoWeeks => $"{part.Name} is on holiday, and nobody was told: four classes of the plan missed.",
         DemoPlot.AwayAsTold => $"{part.Name} is away too, as staff were told: no alert.",
-        DemoPlot.Ill => $"{part.Name} was ill for a week and is back with shorter sessions; the coach's page says away, not why.",
+        DemoPlot.Ill => $"{part.Name} was ill for a week and is back with shorter sessions; the coach's page counts the days since the return and says nothing of the illness.",
         DemoPlot.WeakGrip => $"{part.Name}'s grip strength fell below the published cut-off: told to the clinician alone.",
         _ => null,
     };

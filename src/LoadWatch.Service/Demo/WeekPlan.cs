@@ -76,7 +76,7 @@ public sealed record WeekPlan(double LengthDeviation, IReadOnlyList<WeekSlot> Sl
         new(Sunday, Forenoon, SessionKind.Ride, 60),
     ]);
 
-    /// <summary>The sessions of a week of two rows a day.</summary>
+    /// <summary>The sessions of a week of two rows a day, every day as hard as the next.</summary>
     public static IReadOnlyList<WeekSlot> TwoRowsADay { get; } =
         [.. Enum.GetValues<IsoDayOfWeek>().Where(day => day != None).SelectMany(RowsOf)];
 
@@ -84,7 +84,7 @@ public sealed record WeekPlan(double LengthDeviation, IReadOnlyList<WeekSlot> Sl
 
     private static IEnumerable<WeekSlot> RowsOf(IsoDayOfWeek day)
     {
-        yield return new(day, Morning, day == Tuesday ? SessionKind.RowIntervals : SessionKind.Row, 38);
-        yield return new(day, Afternoon, SessionKind.Row, 33);
+        yield return new(day, Morning, day == Tuesday ? SessionKind.RowIntervals : SessionKind.Row, 43);
+        yield return new(day, Afternoon, SessionKind.Row, day == Tuesday ? 55 : 38);
     }
 }

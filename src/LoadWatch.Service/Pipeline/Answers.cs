@@ -12,10 +12,9 @@ namespace LoadWatch.Service.Pipeline;
 /// Brings decisions in line with the rows of answers: a row without its decisions makes them, a decision whose row is gone or says something else is withdrawn.
 /// A second time changes nothing. A table of which no row is left was lost, not retracted: what it told stands. What a row made stays as it was made while the row stands unchanged, whoever joins the group later.
 /// </summary>
-public sealed class Answers(WorkingConfiguration configuration, Store store, Instant now)
+public sealed class Answers(WorkingConfiguration configuration, Instant now)
 {
-    /// <summary>In one commit.</summary>
-    public AnswersReport TakeUp() => store.Write(TakeUp);
+    private const int QuestionDays = 14;
 
     /// <summary>Within a transaction: after alerts were judged, rows about alerts find those that were raised by it.</summary>
     public AnswersReport TakeUp(StoreSession session)
@@ -33,9 +32,14 @@ public sealed class Answers(WorkingConfiguration configuration, Store store, Ins
         return new AnswersReport(made, gone.Count, [.. rows.Select(row => row.Question).OfType<BriefLine>()]);
     }
 
-    /// <summary>Rows that nobody can follow as things stand, by table and date, with the reason. Writes nothing.</summary>
+    /// <summary>Rows of the last 14 days that nobody can follow as things stand, by table and date, with the reason. Writes nothing.</summary>
     public IReadOnlyList<BriefLine> Questions(StoreSession session) =>
-        [.. Read(session, Told(session.Decisions.All())).Select(row => row.Question).OfType<BriefLine>()];
+    [
+        .. Read(session, Told(session.Decisions.All()))
+            .Where(read => read.Date >= now.InUtc().Date.PlusDays(-QuestionDays))
+            .Select(read => read.Question)
+            .OfType<BriefLine>(),
+    ];
 
     private static ILookup<string, Decision> Told(IReadOnlyList<Decision> all) =>
         DecisionTable.InForce(all).Where(decision => decision.IsAnswer).ToLookup(decision => decision.Via!, StringComparer.Ordinal);
@@ -50,7 +54,7 @@ public sealed class Answers(WorkingConfiguration configuration, Store store, Ins
     {
         var kept = told[Decision.ViaRow(row.Scope, row.Subject, row.Key)].Where(decision => reading.StillSays(row, decision)).ToList();
         var (wanted, question) = reading.Of(row, kept);
-        return new ReadAnswer(kept, wanted, question);
+        return new ReadAnswer(row.Date, kept, wanted, question);
     }
 
     /// <summary>Whether anything is left of the table that told a decision. A version of a table without rows says nothing, so an empty one never means it.</summary>
@@ -70,7 +74,7 @@ public sealed class Answers(WorkingConfiguration configuration, Store store, Ins
         return decision;
     }
 
-    private sealed record ReadAnswer(IReadOnlyList<Decision> Kept, IReadOnlyList<Decision> Wanted, BriefLine? Question);
+    private sealed record ReadAnswer(LocalDate Date, IReadOnlyList<Decision> Kept, IReadOnlyList<Decision> Wanted, BriefLine? Question);
 }
 
 /// <summary>What taking up answers did.</summary>

@@ -144,6 +144,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         .. MissedNotices.Lines(session, contact, Ways(contact), now),
         .. Files(session, contact),
         .. new OpenQuestions(configuration).Lines(session, contact, now.InZone(contact.Zone).Date),
+        .. contact.People.Count > 0 ? [] : new Answers(configuration, now).Questions(session),
     ];
 
     private List<BriefLine> Files(StoreSession session, Contact contact)

@@ -41,7 +41,7 @@ public sealed class Sweep
         intake = new Intake(configuration, store, archive, decoders, settlement, now, Report);
         recovery = new Recovery(store, archive, reader, settlement, probe);
         moved = new MovedFiles(configuration, store, archive, reader, settlement, now);
-        answers = new Answers(configuration, store, now);
+        answers = new Answers(configuration, now);
         assigned = new AssignedFiles(configuration, store, archive, reader, settlement, Report);
         tables = new Tables(configuration, store, decoder, Report);
         recomputations = new Recomputations(store, archive, reader, settlement);
@@ -65,7 +65,7 @@ public sealed class Sweep
         intake.TakeIn(Inboxes.Changed(configuration, store, Report), cancel);
         moved.TakeUp();
         TakeUpTables(cancel);
-        Report.Take(answers.TakeUp());
+        Report.Take(store.Write(answers.TakeUp));
         assigned.TakeUp(cancel);
         Evaluate(cancel);
         Report.InAll = store.Read(session => session.Arrivals.CountByState());

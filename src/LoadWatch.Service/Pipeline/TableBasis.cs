@@ -55,6 +55,6 @@ public sealed class TableBasis(AnchorBook anchors, ILookup<string, PlanEntry> pl
         && (test.Unit is null || test.Unit == kind.Unit)
         && value >= kind.Lowest && value <= kind.Highest
         && (kind.Kind == AnchorKind.OneRepetitionMax) == (test.Exercise is not null)
-            ? new Anchor(person, row.Date, kind.Kind, value, AnchorSource.Measured, test.Exercise)
+            ? new Anchor(person, row.Date, kind.Kind, value, AnchorSource.Measured, test.Exercise, Machine: test.Machine)
             : null;
 }

@@ -32,6 +32,7 @@ public sealed class Tables(WorkingConfiguration configuration, Store store, Arri
 
     private void Update(string scope, List<TableVersion> versions, List<TableVersion> done)
     {
+        KillPoint.Pass("rows");
         var before = store.Read(session => session.TableRows.OfScope(scope));
         var goesOn = versions.Take(done.Count).SequenceEqual(done);
         var after = (goesOn ? versions.Skip(done.Count) : versions).Aggregate(goesOn ? before : [], Apply);
@@ -73,7 +74,7 @@ public sealed class Tables(WorkingConfiguration configuration, Store store, Arri
                 session.People.MarkDirty(person, row.Date);
                 if (TableBasis.Matters(row))
                 {
-                    session.Recomputations.Ask(person, row.Date, row.Content is PlanRow plan ? plan.Until ?? row.Date : LocalDate.MaxIsoValue);
+                    session.Recomputations.Ask(person, row.Date, row.Content is PlanRow plan ? LocalDate.Max(row.Date, plan.Until ?? row.Date) : LocalDate.MaxIsoValue);
                 }
             }
         }

@@ -63,9 +63,9 @@ public class MonotonyRuleTests
         var found = Rule.Of([.. History(60), Week(60, 2.5, 200), Week(61, 1.9, 200), Unknown(62)]);
 
         Assert.Equal(
-            "Load of the last 7 days is heavy with little variation (monotony 2.5, 200 AU against 100 in the usual week); the limit is 2.0, passed since 6 March.", found[0].Text);
+            "Load of the last 7 days varies little at more than the usual week (monotony 2.5, 200 against 100 AU); the limit is 2.0, passed since 6 March.", found[0].Text);
         Assert.Equal(
-            "Load of the last 7 days was heavy with little variation (monotony 1.9, 200 AU against 100 in the usual week) on 7 March, not known since; "
+            "Load of the last 7 days varied little at more than the usual week (monotony 1.9, 200 against 100 AU) on 7 March, not known since; "
                 + "it passed the limit of 2.0 on 6 March and returns below 1.8.",
             found[^1].Text);
     }

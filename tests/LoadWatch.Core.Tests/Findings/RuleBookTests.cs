@@ -11,7 +11,11 @@ public class RuleBookTests
 {
     [Fact]
     public void RulesAreNamedAndInOrder() => Assert.Equal(
-        ["load_ratio", "weekly_jump", "session_spike", "monotony", "hard_days", "falling_load", "stimulus_gap", "silence"], RuleBook.All.Select(rule => rule.Name));
+        [
+            "load_ratio", "weekly_jump", "session_spike", "monotony", "hard_days", "falling_load", "stimulus_gap", "stimulus_low", "falling_capacity", "silence",
+            "not_usable", "function_test",
+        ],
+        RuleBook.All.Select(rule => rule.Name));
 
     [Fact]
     public void WithoutDaysThereAreNoFindings() => Assert.Empty(RuleBook.Evaluate(new RuleSubject(Anna, [], Watched.Defaults)));
@@ -68,7 +72,11 @@ public class RuleBookTests
             new() { HardDays = new() { Enabled = false } },
             new() { FallingLoad = new() { Enabled = false } },
             new() { StimulusGap = new() { Enabled = false } },
+            new() { StimulusLow = new() { Enabled = false } },
+            new() { FallingCapacity = new() { Enabled = false } },
             new() { Silence = new() { Enabled = false } },
+            new() { NotUsable = new() { Enabled = false } },
+            new() { FunctionTest = new() { Enabled = false } },
         ];
 
         Assert.All(RuleBook.All, rule => Assert.True(rule.IsEnabled(Watched.Defaults)));
@@ -130,7 +138,8 @@ public class RuleBookTests
         RuleLimits limits = new();
         object[] parts =
         [
-            limits.LoadRatio, limits.WeeklyJump, limits.SessionSpike, limits.Monotony, limits.HardDays, limits.FallingLoad, limits.StimulusGap, limits.Silence,
+            limits.LoadRatio, limits.WeeklyJump, limits.SessionSpike, limits.Monotony, limits.HardDays, limits.FallingLoad, limits.StimulusGap, limits.StimulusLow,
+            limits.FallingCapacity, limits.Silence, limits.NotUsable, limits.FunctionTest,
         ];
 
         Assert.All(parts, part => Validator.ValidateObject(part, new ValidationContext(part), validateAllProperties: true));

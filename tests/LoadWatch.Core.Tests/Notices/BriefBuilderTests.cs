@@ -46,8 +46,8 @@ public sealed class BriefBuilderTests
     }
 
     [Theory]
-    [InlineData(1, "All quiet: 1 person, nothing to act on. 1 file needs an answer.")]
-    [InlineData(2, "All quiet: 1 person, nothing to act on. 2 files need an answer.")]
+    [InlineData(1, "All quiet: 1 person, nothing to act on. 1 question needs an answer.")]
+    [InlineData(2, "All quiet: 1 person, nothing to act on. 2 questions need an answer.")]
     public void FilesThatNeedAnAnswerAreMentioned(int files, string expected)
     {
         var questions = Enumerable.Range(1, files).Select(n => new BriefLine($"{n}.fit", "nobody is named as its owner")).ToList();

@@ -12,7 +12,7 @@ public sealed class BriefTextTests
         Data up to Saturday 28 February 2026
 
         1 of 2 to look at: 1 well above their usual. 1 person without a known day in
-        the last week. 1 file needs an answer.
+        the last week. 1 question needs an answer.
 
         TO LOOK AT
         - Ann Tarrow (warning)

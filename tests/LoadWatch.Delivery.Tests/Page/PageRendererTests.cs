@@ -73,7 +73,7 @@ public sealed partial class PageRendererTests
     {
         var page = PageRenderer.Render(SquadBrief());
         Assert.Contains("<h1>4 of 24 to look at: 2 well above their usual, 1 without heavy or fast leg work, 1 silent.</h1>", page, StringComparison.Ordinal);
-        Assert.Contains("<p class=\"lead\">1 person without a known day in the last week. 2 files need an answer.</p>", page, StringComparison.Ordinal);
+        Assert.Contains("<p class=\"lead\">1 person without a known day in the last week. 2 questions need an answer.</p>", page, StringComparison.Ordinal);
     }
 
     [Fact]

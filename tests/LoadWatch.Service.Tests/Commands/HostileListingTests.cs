@@ -13,7 +13,7 @@ namespace LoadWatch.Service.Tests.Commands;
 /// <summary>Names and reasons that mean harm, on the terminal and in JSON.</summary>
 public sealed class HostileListingTests : IDisposable
 {
-    private readonly WorkingFolder folder = new(roster: Roster());
+    private readonly WorkingFolder folder = new(roster: Roster(), anchors: "person,date,anchor,value,unit,source,exercise\n");
 
     public HostileListingTests()
     {

@@ -26,7 +26,7 @@ internal static class AnswerRows
     });
 
     public static AnswersReport TakeUp(this WorkingFolder folder, Instant? now = null) =>
-        folder.Write((workplace, session) => new Answers(workplace.Configuration, workplace.Store, now ?? WorkingFolder.Now).TakeUp(session));
+        folder.Write((workplace, session) => new Answers(workplace.Configuration, now ?? WorkingFolder.Now).TakeUp(session));
 
     public static IReadOnlyList<Decision> Decisions(this WorkingFolder folder) => folder.Read((_, session) => session.Decisions.All());
 

@@ -154,7 +154,7 @@ public sealed class AnswersTests : IDisposable
         var question = Assert.Single(folder.TakeUp().Questions);
 
         Assert.Equal(("answers.csv, 15 June", reason), (question.Subject, question.Sentence));
-        Assert.Equal([question], folder.Read((workplace, session) => new Answers(workplace.Configuration, workplace.Store, WorkingFolder.Now).Questions(session)));
+        Assert.Equal([question], folder.Read((workplace, session) => new Answers(workplace.Configuration, WorkingFolder.Now).Questions(session)));
         Assert.Empty(folder.Decisions());
     }
 

@@ -9,7 +9,7 @@ public sealed partial class KillTests : IDisposable
     private const int Kills = 10;
     private const int MostMilliseconds = 500;
 
-    private static readonly string[] Points = ["archived", "waiting", "decoded", "settled", "evaluated", "delivered"];
+    private static readonly string[] Points = ["archived", "waiting", "decoded", "settled", "rows", "evaluated", "delivered"];
 
     private static readonly Lazy<string> Undisturbed = new(() =>
     {
@@ -38,6 +38,7 @@ public sealed partial class KillTests : IDisposable
         Assert.NotEqual(0, Loadwatch.RunAndKillAt(point, Sweep(leaving)).Code);
         AssertDone(Loadwatch.Run(Sweep(leaving)));
         AssertEndsWell(leaving, Undisturbed.Value);
+        Assert.Contains("\"name\":\"kilograms\",\"value\":800", leaving.Export("activities"), StringComparison.Ordinal);
         Assert.Equal(leaving.InboxHashes(), leaving.ArchiveHashes());
     }
 
@@ -125,6 +126,11 @@ public sealed partial class KillTests : IDisposable
         folder.Sweep(WorkingFolder.Now - Duration.FromDays(1));
         Assert.Empty(folder.Export("alerts"));
         folder.Fill(last);
+        folder.Fill(
+        [
+            ("sets.csv", Some.Text("date,person,exercise,set,repetitions,kilograms\n2026-06-13,bo,leg_press,1,10,80\n")),
+            ("plan.csv", Some.Text("from,person,plan,start,end\n2026-06-13,bo,class,10:00,11:00\n")),
+        ]);
     }
 
     private static string SweptOnce(IReadOnlyList<(string Path, byte[] Bytes)> files)

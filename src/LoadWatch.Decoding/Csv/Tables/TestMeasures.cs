@@ -1,3 +1,4 @@
+using LoadWatch.Findings;
 using LoadWatch.People;
 
 namespace LoadWatch.Decoding.Csv.Tables;
@@ -8,23 +9,23 @@ namespace LoadWatch.Decoding.Csv.Tables;
 /// </summary>
 internal static class TestMeasures
 {
-    private static readonly NumberRole[] FunctionTests =
+    private static readonly NumberRole[] Performed =
     [
-        new("grip_strength", Measure.Kilograms, 0, 150),
-        new("chair_stand_5", Measure.Seconds, 1, 600),
-        new("chair_stand_30_s", Measure.Only("count"), 0, 100) { IsWhole = true },
-        new("gait_speed", Measure.MetresPerSecond, 0, 5),
-        new("timed_up_and_go", Measure.Seconds, 1, 600),
-        new("short_physical_performance_battery", Measure.Only("points"), 0, 12) { IsWhole = true },
-        new("walk_400_m", Measure.Seconds, 60, 3600),
+        new(FunctionTests.Grip, Measure.Kilograms, 0, 150),
+        new(FunctionTests.ChairStands, Measure.Seconds, 1, 600),
+        new("chair_stands_30_s", Measure.Only("count"), 0, 100) { IsWhole = true },
+        new(FunctionTests.Gait, Measure.MetresPerSecond, 0, 5),
+        new(FunctionTests.UpAndGo, Measure.Seconds, 1, 600),
+        new(FunctionTests.PerformanceBattery, Measure.Only("points"), 0, 12) { IsWhole = true },
+        new(FunctionTests.Walk400, Measure.Seconds, 60, 3600),
         new("appendicular_muscle_mass", Measure.Kilograms, 1, 100),
     ];
 
     private static readonly Dictionary<string, NumberRole> Table =
-        FunctionTests.Concat(AnchorKinds.All.Select(FromAnchor)).ToDictionary(test => test.Name, StringComparer.Ordinal);
+        Performed.Concat(AnchorKinds.All.Select(FromAnchor)).ToDictionary(test => test.Name, StringComparer.Ordinal);
 
     /// <summary>Function tests, then anchors.</summary>
-    public static IReadOnlyList<string> Words { get; } = [.. FunctionTests.Concat(AnchorKinds.All.Select(FromAnchor)).Select(test => test.Name)];
+    public static IReadOnlyList<string> Words { get; } = [.. Performed.Concat(AnchorKinds.All.Select(FromAnchor)).Select(test => test.Name)];
 
     public static NumberRole Of(string test) => Table[test];
 

@@ -1,4 +1,5 @@
 using LoadWatch.Decoding.Csv;
+using LoadWatch.Findings;
 using LoadWatch.Loads;
 using LoadWatch.Plans;
 using LoadWatch.Rows;
@@ -74,7 +75,7 @@ public class TableKindTests
     [Theory]
     [InlineData("grip_strength,31.5,kg", 31.5, "kg")]
     [InlineData("grip_strength,50,lb", 22.6796185, "kg")]
-    [InlineData("chair_stand_5,13.4,s", 13.4, "s")]
+    [InlineData("chair_stands_5,13.4,s", 13.4, "s")]
     [InlineData("gait_speed,3.6,km/h", 1, "m/s")]
     [InlineData("walk_400_m,6,min", 360, "s")]
     [InlineData("height,172,cm", 1.72, "m")]
@@ -94,7 +95,7 @@ public class TableKindTests
             date,test,value,unit,exercise,machine,outcome,hand,device,chair_height_m
             2026-10-05,one_repetition_max,120,kg,leg_press,B2,,,,
             2026-10-05,grip_strength,31.5,kg,,,,left,dynamometer 2,
-            2026-10-05,chair_stand_5,,,,,unable,,,0.43
+            2026-10-05,chair_stands_5,,,,,unable,,,0.43
 
             """.ReplaceLineEndings("\n"));
 
@@ -102,7 +103,7 @@ public class TableKindTests
             [
                 new TestRow("one_repetition_max", 120, "kg", "leg_press", "B2", null, null, null, null),
                 new TestRow("grip_strength", 31.5, "kg", null, null, null, "left", "dynamometer 2", null),
-                new TestRow("chair_stand_5", null, null, null, null, TestOutcome.Unable, null, null, 0.43),
+                new TestRow("chair_stands_5", null, null, null, null, TestOutcome.Unable, null, null, 0.43),
             ],
             rows);
     }
@@ -128,8 +129,21 @@ public class TableKindTests
     {
         var problem = TableFiles.Decode("date,test,value\n2026-10-05,grip,31\n").Problems[1];
 
-        Assert.StartsWith("not one of grip_strength, chair_stand_5, ", problem.Reason, StringComparison.Ordinal);
+        Assert.StartsWith("not one of grip_strength, chair_stands_5, ", problem.Reason, StringComparison.Ordinal);
         Assert.Contains(", one_repetition_max, ", problem.Reason, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void EveryFunctionTestThatARuleKnowsIsReadInItsUnit()
+    {
+        foreach (var test in FunctionTests.All)
+        {
+            var value = test.Word == FunctionTests.Walk400 ? 300 : 4; // Plausible for the test.
+
+            var row = TableFiles.Contents<TestRow>($"date,test,value,unit\n2026-10-05,{test.Word},{value},{test.Unit}\n")[0];
+
+            Assert.Equal((test.Word, value, test.Unit), (row.Test, row.Value!.Value, row.Unit));
+        }
     }
 
     [Fact]

@@ -1,0 +1,86 @@
+using LoadWatch.Alerts;
+using LoadWatch.Days;
+using LoadWatch.Findings;
+using LoadWatch.Notices;
+using LoadWatch.People;
+using LoadWatch.Plans;
+using NodaTime;
+
+namespace LoadWatch.Tests.Notices;
+
+public class CommonCauseTests
+{
+    private static readonly LocalDate Date = new(2026, 3, 4);
+    private static readonly Contact Ada = new("ada", "Ada", ContactRole.Coach, ["squad"], [], DateTimeZone.Utc, new LocalTime(6, 30), new HashSet<IsoDayOfWeek>());
+
+    [Fact]
+    public void ManySilentPeopleAreOneLineAndNobodyIsFlaggedForIt()
+    {
+        var brief = Build(Enumerable.Range(0, 8).Select(number => Person(number, silent: number < 5, expected: true)));
+
+        Assert.Empty(brief.Flagged);
+        Assert.Equal("squad", brief.Questions[0].Subject);
+        Assert.StartsWith("Recordings of 5 of 8 people stay away at once", brief.Questions[0].Sentence, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void WhoHasAnotherReasonIsStillNamed()
+    {
+        var people = Enumerable.Range(0, 8).Select(number => Person(number, silent: number < 5, expected: true)).ToList();
+        people[0] = people[0] with { Alerts = [.. people[0].Alerts, News("p0", "load_ratio")] };
+
+        Assert.Equal("p0", Assert.Single(Build(people).Flagged).PersonId);
+    }
+
+    [Theory]
+    [InlineData(4, 4)]
+    [InlineData(5, 11)]
+    public void AFewSilentPeopleAreNamed(int silent, int all) =>
+        Assert.Equal(silent, Build(Enumerable.Range(0, all).Select(number => Person(number, silent: number < silent, expected: false))).Flagged.Count);
+
+    [Fact]
+    public void TheFirstLineSaysHowManyRecordingsOfTheLastPlannedSessionAreIn()
+    {
+        var brief = Build(Enumerable.Range(0, 6).Select(number => Person(number, silent: number < 2, expected: true)));
+
+        Assert.Contains("4 of 6 recordings of the session of 3 March are in.", brief.FirstLine, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void WithoutAPlanItSaysNothingOfIt() => Assert.DoesNotContain(
+        "recordings of the session", Build(Enumerable.Range(0, 6).Select(number => Person(number, silent: false, expected: false))).FirstLine, StringComparison.Ordinal);
+
+    [Theory]
+    [InlineData(ContactRole.Coach, "away since 3 March")]
+    [InlineData(ContactRole.FrontDesk, "away since 3 March")]
+    [InlineData(ContactRole.Clinician, "ill since 3 March")]
+    public void OnlyThoseWhoMayKnowReadWhySomebodyIsAbsent(ContactRole role, string remark)
+    {
+        var subject = Person(0, silent: true, expected: false) with { Alerts = [] };
+        var ill = subject with { Days = [subject.Days[0] with { Plan = DayPlan.None with { Absence = AbsenceWord.Ill } }] };
+
+        var row = BriefBuilder.Build(Ada with { Role = role }, Date, [ill], []).Groups[0].Rows[0];
+        Assert.StartsWith(remark, row.Remark, StringComparison.Ordinal);
+    }
+
+    private static Brief Build(IEnumerable<BriefSubject> people) => BriefBuilder.Build(Ada, Date, [.. people], []);
+
+    private static BriefSubject Person(int number, bool silent, bool expected)
+    {
+        var person = new Person($"p{number}", $"Person {number}", "squad", 1990, null, DateTimeZone.Utc);
+        var day = new Day
+        {
+            Person = person.Id,
+            Date = Date.PlusDays(-1),
+            State = silent ? DayState.Unknown : DayState.Recorded,
+            Plan = expected ? DayPlan.None with { Expected = 1 } : DayPlan.None,
+        };
+        return new BriefSubject(person, new Group("squad", "squad", "banister_trimp", new RuleLimits()), [day], silent ? [News(person.Id, "silence")] : [], []);
+    }
+
+    private static AlertNews News(string person, string rule) => new(
+        new Alert(new FindingKey(person, rule, null), Date.PlusDays(-1), Date.PlusDays(-1), AlertState.Unacknowledged, Severity.Notice, "No recording for 5 days."),
+        IsNew: true,
+        ReturnedSince: false,
+        Corrected: false);
+}
