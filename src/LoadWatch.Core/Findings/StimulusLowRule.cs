@@ -11,7 +11,7 @@ namespace LoadWatch.Findings;
 
 /// <summary>
 /// Too few heavy-or-fast days of a region, legs first. Off in the first weeks, in light weeks, off-season, absence and return, and not
-/// raised while the gap since the last one is long enough for the rule of the gap: that one tells it then, and what stood before it is over. Days covered too thinly leave things as they were (I-6).
+/// raised while the gap since the last one is long enough for the rule of the gap: that one tells it then. Days covered too thinly leave things as they were (I-6).
 /// </summary>
 public sealed class StimulusLowRule : IRule
 {
@@ -36,7 +36,7 @@ public sealed class StimulusLowRule : IRule
         for (var index = first; index >= 0 && index < series.Count; index++)
         {
             var day = subject.Days[index];
-            if (IsOff(day) || (since is not null && TheGapStands(subject, day, series[index])))
+            if (IsOff(day))
             {
                 (since, read) = (null, null);
             }
@@ -61,10 +61,6 @@ public sealed class StimulusLowRule : IRule
 
     private static bool TheGapTellsIt(RuleSubject subject, Day day, RegionDay region) =>
         region.DaysSince >= StimulusGapLimit.For(subject.Person.AgeOn(day.Date), region, subject.Limits.StimulusGap).NoticeDays;
-
-    /// <summary>The rule of the gap tells it on this very date: known well enough, as that rule asks.</summary>
-    private static bool TheGapStands(RuleSubject subject, Day day, RegionDay region) =>
-        region is { HeavyOrFast: false, DaysSince: { } gap } && subject.Limits.StimulusGap.KnownEnough(region.KnownDaysSince, gap) && TheGapTellsIt(subject, day, region);
 
     private static Count? Read(RuleSubject subject, List<RegionDay> series, int first, int index)
     {

@@ -33,9 +33,9 @@ public enum DemoPlot
     /// <summary>Grip strength fell below the published cut-off.</summary>
     WeakGrip,
 
-    /// <summary>No leg work for nearly four weeks.</summary>
+    /// <summary>No leg work for more than three weeks.</summary>
     ArmsForWeeks,
 
-    /// <summary>No leg work for nearly two weeks.</summary>
+    /// <summary>No leg work for about two weeks.</summary>
     ArmsForDays,
 }

@@ -41,7 +41,7 @@ public static class DemoStory
         DemoPlot.RampUp => $"{part.Name} rows twice a day in the last week: more than twice the usual week, and every day as hard as the next.",
         DemoPlot.EasyOnly => $"{part.Name} has only rowed easily for more than two weeks: no heavy or fast work of the legs. The coach has seen it.",
         DemoPlot.ArmsForWeeks => $"{part.Name} has trained arms only for more than three weeks: no heavy leg work.",
-        DemoPlot.ArmsForDays => $"{part.Name} has trained arms only for nearly two weeks.",
+        DemoPlot.ArmsForDays => $"{part.Name} has trained arms only for about two weeks: no heavy leg work, told as a notice.",
         DemoPlot.StrapFailed => $"{part.Name}'s strap gives no heart rate for three weeks: no load rather than a wrong one, and a word about the strap.",
         DemoPlot.SilentNineDays => $"{part.Name} sends nothing for nine days: two and more of the squad's planned rows without a recording.",
         DemoPlot.SilentTwoWeeks => $"{part.Name} is on holiday, and nobody was told: four classes of the plan missed.",

@@ -2,7 +2,10 @@ using NodaTime;
 
 namespace LoadWatch.Service.Demo;
 
-/// <summary>Which sessions a part holds, date by date. Dates of the plots count back from the last date, weekdays are those of the calendar.</summary>
+/// <summary>
+/// Which sessions a part holds, date by date. Dates of the plots count back from the last date, weekdays are those of the calendar. Heavy leg work ends with
+/// the last of a usual week's days of it, so that it is told as one gap and not as few days before that.
+/// </summary>
 internal static class DemoTimeline
 {
     /// <summary>Length of the demo, days.</summary>
@@ -42,14 +45,14 @@ internal static class DemoTimeline
         return part.Plot switch
         {
             DemoPlot.RampUp when back <= 7 => WeekPlan.TwoRowsADay.Where(slot => slot.Day == date.DayOfWeek),
-            DemoPlot.EasyOnly when back <= 16 => usual.Select(slot => slot with { Kind = SessionKind.Row }),
+            DemoPlot.EasyOnly when date > DemoCalendar.LatestBefore(until, 17, IsoDayOfWeek.Tuesday) => usual.Select(slot => slot with { Kind = SessionKind.Row }),
             DemoPlot.Ill when back is <= IllFrom and > IllUntil => [],
             DemoPlot.Ill when back <= IllUntil => usual.Select(slot => slot with { Minutes = slot.Minutes * 2 / 3 }),
             DemoPlot.AwayAsTold when back <= AwayFrom => [],
             DemoPlot.SilentNineDays when back <= 9 => [],
             DemoPlot.SilentTwoWeeks when back <= 14 => [],
-            DemoPlot.ArmsForWeeks when back <= 24 => usual.Select(slot => slot with { Kind = SessionKind.ClassArms }),
-            DemoPlot.ArmsForDays when back <= 12 => usual.Select(slot => slot with { Kind = SessionKind.ClassArms }),
+            DemoPlot.ArmsForWeeks when date > DemoCalendar.LatestBefore(until, 25, IsoDayOfWeek.Saturday) => usual.Select(slot => slot with { Kind = SessionKind.ClassArms }),
+            DemoPlot.ArmsForDays when date > DemoCalendar.LatestBefore(until, 13, IsoDayOfWeek.Saturday) => usual.Select(slot => slot with { Kind = SessionKind.ClassArms }),
             _ when part.Group == DemoCast.Boat && DemoCalendar.IsInCamp(date, until) => usual.Select(slot => slot with { Minutes = slot.Minutes * 6 / 5 }),
             _ => usual,
         };
