@@ -62,6 +62,8 @@ internal static class DeliveryPlan
         "Kaisa Suvantoharju has sent a file twice, once under another name: it counts once.",
         "An upload of Joel Terhokari's broke off: that half is refused, the whole file beside it counts.",
         "Inka Lumisola and Sanni Kuuraniitty hand two pods to each other every Monday: serial number and date tell whose a recording is.",
+        "The clinic's set log comes whole every night, under the names that the gym knows: two of its lines are corrected and one is taken out.",
+        "The squad's form of ratings grows every night; one rating fits two recordings and one fits none: both are asked about.",
         "A row of Saku Honkaluoto's lay on the club's laptop: held, until the table of answers said whose it is.",
         "A file in another folder that names nobody stays held; a settings file of Henri Loivarinne's is put aside.",
     ];

@@ -9,7 +9,7 @@ public enum DemoPlot
     /// <summary>Two sessions a day in the last week.</summary>
     RampUp,
 
-    /// <summary>Rows easy for the last two weeks and more: nothing heavy, nothing fast. The coach has seen it.</summary>
+    /// <summary>Rows easy and leaves out the gym for the last two weeks and more: nothing heavy, nothing fast. The coach has seen it.</summary>
     EasyOnly,
 
     /// <summary>The strap gives 0 for the last three weeks; power is still there.</summary>

@@ -39,7 +39,7 @@ public static class DemoStory
     private static string? Line(DemoPart part) => part.Plot switch
     {
         DemoPlot.RampUp => $"{part.Name} rows twice a day in the last week: more than twice the usual week, and every day as hard as the next.",
-        DemoPlot.EasyOnly => $"{part.Name} has only rowed easily for more than two weeks: no heavy or fast work of the legs. The coach has seen it.",
+        DemoPlot.EasyOnly => $"{part.Name} has rowed easily and left out the gym for more than two weeks: no heavy or fast work of the legs. The coach has seen it.",
         DemoPlot.ArmsForWeeks => $"{part.Name} has trained arms only for more than three weeks: no heavy leg work.",
         DemoPlot.ArmsForDays => $"{part.Name} has trained arms only for about two weeks: no heavy leg work, told as a notice.",
         DemoPlot.StrapFailed => $"{part.Name}'s strap gives no heart rate for three weeks: no load rather than a wrong one, and a word about the strap.",

@@ -45,7 +45,8 @@ internal static class DemoTimeline
         return part.Plot switch
         {
             DemoPlot.RampUp when back <= 7 => WeekPlan.TwoRowsADay.Where(slot => slot.Day == date.DayOfWeek),
-            DemoPlot.EasyOnly when date > DemoCalendar.LatestBefore(until, 17, IsoDayOfWeek.Tuesday) => usual.Select(slot => slot with { Kind = SessionKind.Row }),
+            DemoPlot.EasyOnly when date > DemoCalendar.LatestBefore(until, 17, IsoDayOfWeek.Tuesday) =>
+                usual.Where(slot => slot.Kind != SessionKind.Gym).Select(slot => slot with { Kind = SessionKind.Row }),
             DemoPlot.Ill when back is <= IllFrom and > IllUntil => [],
             DemoPlot.Ill when back <= IllUntil => usual.Select(slot => slot with { Minutes = slot.Minutes * 2 / 3 }),
             DemoPlot.AwayAsTold when back <= AwayFrom => [],
