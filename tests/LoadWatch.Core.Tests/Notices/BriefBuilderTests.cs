@@ -71,7 +71,7 @@ public sealed class BriefBuilderTests
     [Fact]
     public void TenPeopleAreNamedAndTheRestIsCounted()
     {
-        var brief = Build([.. Enumerable.Range(1, 13).Select(n => Subject($"p{n:00}", $"P {n:00}", Silence($"p{n:00}")))]);
+        var brief = Build([.. Enumerable.Range(1, 13).Select(n => Subject($"p{n:00}", $"P {n:00}", LoadRatio($"p{n:00}")))]);
         Assert.Equal(10, brief.Flagged.Count);
         Assert.Equal(3, brief.FlaggedBeyond);
         Assert.StartsWith("13 of 13 to look at", brief.FirstLine, StringComparison.Ordinal);
