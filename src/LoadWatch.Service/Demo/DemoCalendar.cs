@@ -19,7 +19,7 @@ internal static class DemoCalendar
     public static Instant Written(LocalDate morning) => (morning + UploadedBy).InZoneLeniently(DemoPerson.Zone).ToInstant();
 
     /// <summary>The squad's day off.</summary>
-    public static LocalDate DayOff(LocalDate until) => LatestBefore(until, 30, IsoDayOfWeek.Thursday);
+    public static LocalDate DayOff(LocalDate until) => LatestBefore(until, 54, IsoDayOfWeek.Thursday);
 
     /// <summary>A regatta on a Saturday and the Sunday after it.</summary>
     public static LocalDate Regatta(LocalDate until) => LatestBefore(until, 44, IsoDayOfWeek.Saturday);
