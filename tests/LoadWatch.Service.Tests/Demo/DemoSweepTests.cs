@@ -10,20 +10,23 @@ using NodaTime;
 
 namespace LoadWatch.Service.Tests.Demo;
 
-/// <summary>The whole demo once, night by night, as the command goes through it.</summary>
+/// <summary>The demo once, night by night, as the command goes through it: everybody to whom something happens, and the class.</summary>
 public sealed class DemoSweepTests : IDisposable
 {
     private static readonly LocalDate Until = new(2026, 11, 27);
     private static readonly LocalTime SweptAt = new(7, 30);
+
+    private static readonly DemoPart[] Cast =
+        [.. DemoCast.All.Where(part => part.Plot != DemoPlot.Usual || part.Group != DemoCast.Boat || part.Id is "eero" or "helmi" or "inka" or "sanni")];
 
     private readonly DirectoryInfo root = Directory.CreateTempSubdirectory("loadwatch-demo-");
 
     public void Dispose() => root.Delete(recursive: true);
 
     [Fact]
-    public void TheWholeDemoEndsWithTheStory()
+    public void NightAfterNightTheDemoComesToItsStory()
     {
-        var demo = new DemoFolder(root.FullName, seed: 1, Until);
+        var demo = new DemoFolder(root.FullName, seed: 1, Until, Cast);
         demo.Arrive(demo.Mornings[0]);
         using var workplace = Workplace.OpenToWork(Path.Combine(root.FullName, "loadwatch.json"));
         Sweep(workplace, demo.Mornings[0]);
@@ -52,7 +55,7 @@ public sealed class DemoSweepTests : IDisposable
 
     private static void AssertAlerts(Workplace workplace)
     {
-        var standing = workplace.Store.Read(session => DemoCast.All
+        var standing = workplace.Store.Read(session => Cast
             .OrderBy(part => part.Id, StringComparer.Ordinal)
             .SelectMany(part => session.Alerts.Open(part.Id))
             .Where(alert => AlertLife.IsActive(alert.State))
@@ -94,7 +97,8 @@ public sealed class DemoSweepTests : IDisposable
 
     private void AssertPages(Workplace workplace)
     {
-        var coach = Page("coach");
+        var whole = Page("coach");
+        var coach = whole[..whole.IndexOf("How to read this page", StringComparison.Ordinal)];
         Assert.DoesNotContain("Grip", coach, StringComparison.OrdinalIgnoreCase);
         Assert.DoesNotContain(" ill", coach, StringComparison.OrdinalIgnoreCase);
         Assert.Contains("Niilo Karikallas", coach, StringComparison.Ordinal);
