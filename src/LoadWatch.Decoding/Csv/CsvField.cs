@@ -1,3 +1,5 @@
+using System.ComponentModel.DataAnnotations;
+
 namespace LoadWatch.Decoding.Csv;
 
 /// <summary>A column of a table and what its cells say.</summary>
@@ -34,10 +36,12 @@ public sealed record CsvWideEntry
     /// <summary>The person. Default null: see <c>person_column</c>.</summary>
     public string? Person { get; init; }
 
-    /// <summary>The how-manieth session of the date. Default null.</summary>
+    /// <summary>The how-manieth session of the date, 1 to 50. Default null.</summary>
+    [Range(1, 50)]
     public int? Order { get; init; }
 
-    /// <summary>The how-manieth set. Default null.</summary>
+    /// <summary>The how-manieth set, 1 to 1000. Default null.</summary>
+    [Range(1, 1000)]
     public int? Set { get; init; }
 
     /// <summary>The exercise. Default null.</summary>

@@ -46,6 +46,15 @@ public static class Attribution
         return owners.Exists(those => those.Count == 0) ? [] : Ids(owners.SelectMany(those => those));
     }
 
+    /// <summary>Who had a device. The date of a recording is one of its owner's: each candidate is asked by the clock of the recording, else of the own zone.</summary>
+    public static IReadOnlyList<Person> Owners(Recording recording, string serial, DeviceBook devices, IReadOnlyDictionary<string, Person> people) =>
+    [
+        .. devices.PeopleOf(serial)
+            .Select(id => people.GetValueOrDefault(id))
+            .OfType<Person>()
+            .Where(person => devices.On(serial, Activities.LocalStart.Of(recording, person).Date, session: null) == person.Id),
+    ];
+
     private static IReadOnlyList<string> ByFileName(IReadOnlyCollection<SeenName> names, WorkingConfiguration configuration)
     {
         var patterns = configuration.Inboxes.Where(inbox => inbox.FilePattern is not null).ToDictionary(inbox => inbox.Name, inbox => inbox.FilePattern!, StringComparer.Ordinal);
@@ -54,11 +63,8 @@ public static class Attribution
             .SelectMany(name => name.Path.Split(Inside).Select(stretch => patterns[name.Inbox].Find(stretch[(stretch.LastIndexOf('/') + 1)..], configuration.Subjects))));
     }
 
-    /// <summary>The date of a recording is one of its owner's: each candidate is asked by the clock of the recording, else of the own zone.</summary>
-    private static List<Person?> Owners(Recording recording, DeviceBook devices, IReadOnlyDictionary<string, Person> people) =>
-        recording.Device.Serial is { } number && number.ToString(System.Globalization.CultureInfo.InvariantCulture) is var serial
-            ? [.. devices.PeopleOf(serial).Select(id => people.GetValueOrDefault(id)).Where(person => person is not null && devices.On(serial, Activities.LocalStart.Of(recording, person).Date, session: null) == person.Id)]
-            : [];
+    private static IReadOnlyList<Person> Owners(Recording recording, DeviceBook devices, IReadOnlyDictionary<string, Person> people) =>
+        recording.Device.Serial is { } serial ? Owners(recording, serial.ToString(System.Globalization.CultureInfo.InvariantCulture), devices, people) : [];
 
     private static IReadOnlyList<string> Ids(IEnumerable<Person?> people) =>
         [.. people.OfType<Person>().Select(person => person.Id).Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal)];

@@ -22,6 +22,8 @@ public static class MeantFile
             [{ Kind: "gzip" or "zip" } archive] => $"{Name(session, archive)} is an archive; assign the files in it: {Members(session, archive)}",
             [{ State: ArrivalState.Aside or ArrivalState.Refused } useless] =>
                 $"{Name(session, useless)} has nothing to assign; it is {Words.Of(useless.State)}: {OneLine.Of(useless.Reason ?? "")}",
+            [{ State: ArrivalState.Stored, Person: null } several] when session.Recordings.OfArrival(several.Sha).Count > 0 =>
+                $"{Name(session, several)} holds recordings of several people, each of whom it names; an alias or a line in devices.csv tells whose one is",
             [_] => null,
             _ => $"\"{word}\" is more than one file; name one by its digits: {Names(session, found)}",
         };

@@ -101,7 +101,12 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     }
 
     private Person? OwnerOf(Recording recording) =>
-        recording.Subject is { } subject ? configuration.Subjects.Find(subject, recording.Start!.Value.InUtc().Date) : null;
+        recording.Subject is { } subject
+            ? configuration.Subjects.Find(subject) ?? ByDevice(recording, subject.Trim())
+            : null;
+
+    private Person? ByDevice(Recording recording, string serial) =>
+        Attribution.Owners(recording, serial, configuration.Devices, configuration.People) is [var only] ? only : null;
 
     private IEnumerable<Recording> Usable(DecodedFile file) => file.Recordings.Where(recording => ArrivalVerdict.IsUsable(recording, now));
 

@@ -1,5 +1,6 @@
 using LoadWatch.Notices;
 using LoadWatch.Rows;
+using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Rows;
@@ -13,6 +14,8 @@ namespace LoadWatch.Service.Pipeline;
 /// </summary>
 public sealed class Tables(WorkingConfiguration configuration, Store store, ArrivalDecoder decoder, SweepReport report)
 {
+    private static readonly RowContent Compared = new LoadWatch.Rows.DayRow(DayWord.Rest);
+
     public void TakeUp(CancellationToken cancel)
     {
         var (seen, applied) = store.Read(session => (
@@ -35,36 +38,55 @@ public sealed class Tables(WorkingConfiguration configuration, Store store, Arri
         KillPoint.Pass("rows");
         var before = store.Read(session => session.TableRows.OfScope(scope));
         var goesOn = versions.Take(done.Count).SequenceEqual(done);
-        var after = (goesOn ? versions.Skip(done.Count) : versions).Aggregate(goesOn ? before : [], Apply);
+        var unread = new List<TableVersion>();
+        var after = (goesOn ? versions.Skip(done.Count) : versions).Aggregate(goesOn ? before : [], (rows, version) => Apply(rows, version, unread));
         store.Write(session =>
         {
             Write(session, before, after);
-            session.TableVersions.SetApplied(scope, versions);
+            session.TableVersions.SetApplied(scope, [.. versions.Except(unread)]);
         });
     }
 
-    private IReadOnlyList<StoredRow> Apply(IReadOnlyList<StoredRow> rows, TableVersion version)
+    /// <param name="unread">Gets the version where it cannot be read back: the next sweep tries again.</param>
+    private IReadOnlyList<StoredRow> Apply(IReadOnlyList<StoredRow> rows, TableVersion version, List<TableVersion> unread)
     {
         try
         {
             var table = decoder.ReadTable(store.Read(session => session.Arrivals.Get(version.Sha))!);
-            return TableUpdate.Apply(rows, version, table, row => PersonOf(row, version));
+            return NeedsOwner(table) && IsToldElsewhere(version) ? rows : TableUpdate.Apply(rows, version, table, row => PersonOf(row, version));
         }
         catch (Exception e) when (e is InvalidDataException or IOException)
         {
             // The others go on (I-10).
+            unread.Add(version);
             report.Unreadable.Add(new BriefLine(version.Path, $"a version of this table cannot be read back: {e.Message}"));
             return rows;
         }
     }
 
+    private static bool NeedsOwner(DecodedTable table) =>
+        table.Kind is not (RowKind.Plan or RowKind.Answers) && table.Rows.Any(row => row.Subject is null);
+
+    /// <summary>
+    /// Whether a name that names nobody has its owner from another name of the content: it was moved there to be taken up, and what is retracted there later
+    /// must not stand on here.
+    /// </summary>
+    private bool IsToldElsewhere(TableVersion version)
+    {
+        var (names, decided) = store.Read(session => (session.Sightings.Of(version.Sha), session.Decisions.Assigned().ContainsKey(version.Sha)));
+        var byOwner = names.ToLookup(name => Attribution.Claims(null, [new SeenName(name.Inbox, name.Path)], configuration).Count > 0);
+        return !decided && byOwner[true].Any() && byOwner[false].Any(name => name.Path == version.Path && version.Scope.StartsWith($"{name.Inbox}/", StringComparison.Ordinal));
+    }
+
     private string? PersonOf(LoadWatch.Rows.TableRow row, TableVersion version) => row.Subject is { } written ? configuration.Subjects.Find(written, row.Date)?.Id : version.Owner;
+
+    /// <summary>A row to be compared: contents hold lists, which are equal by their text only.</summary>
+    private static (StoredRow Row, string Text) Told(StoredRow row) => (row with { Content = Compared }, RowText.Write(row.Content));
 
     private void Write(StoreSession session, IReadOnlyList<StoredRow> before, IReadOnlyList<StoredRow> after)
     {
-        var (old, now) = (before.ToHashSet(), after.ToHashSet());
-        var gone = before.Where(row => !now.Contains(row)).ToList();
-        var said = after.Where(row => !old.Contains(row)).ToList();
+        var gone = before.ExceptBy(after.Select(Told), Told).ToList();
+        var said = after.ExceptBy(before.Select(Told), Told).ToList();
         session.TableRows.Remove(gone);
         session.TableRows.Put(said);
         foreach (var row in gone.Concat(said))

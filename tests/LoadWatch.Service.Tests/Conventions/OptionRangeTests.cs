@@ -5,10 +5,14 @@ namespace LoadWatch.Service.Tests.Conventions;
 
 public sealed class OptionRangeTests
 {
-    /// <summary>Lists of bounds and shares: <see cref="ConfigurationReader"/> wants them rising and says from and to where.</summary>
+    /// <summary>
+    /// Lists of bounds and shares: <see cref="ConfigurationReader"/> wants them rising and says from and to where. Limits of a signal's quality are in the unit
+    /// of a user's file.
+    /// </summary>
     private static readonly string[] CheckedOtherwise =
     [
         "ComputationEntry.HeartRateReserveBounds", "ComputationEntry.PowerBounds", "ComputationEntry.SpeedBounds", "ComputationEntry.SpeedMaxShares",
+        "CsvQuality.AtLeast", "CsvQuality.AtMost",
     ];
 
     [Fact]

@@ -40,14 +40,14 @@ public sealed class LateRecordingTests : IDisposable
         folder.Put("anna/two.fit", Some.Fit(Some.Yesterday, 60));
         folder.PutTable("sessions.csv", 0, Header, $"{Nights.Day(0)},anna,,,cycling,,7");
         folder.Sweep();
-        const string question = "a rating of 7 of 14 June (sessions) fits the recordings at 12:00 and 13:00";
+        const string question = "A rating of 7 of 14 June (sessions) fits the recordings at 12:00 and 13:00";
         Assert.Contains(question, folder.Brief(), StringComparison.Ordinal);
         Assert.All(folder.Activities("anna"), activity => Assert.Null(activity.Value("rating")));
 
         folder.PutTable("sessions.csv", 0, Header, $"{Nights.Day(0)},anna,,13:00,cycling,,7");
         folder.Sweep(WorkingFolder.Now + Duration.FromMinutes(1));
 
-        Assert.DoesNotContain("a rating of 7", folder.Brief(), StringComparison.Ordinal);
+        Assert.DoesNotContain("A rating of 7", folder.Brief(), StringComparison.Ordinal);
         Assert.Equal([null, 7], folder.Activities("anna").Select(activity => activity.Value("rating")));
         AssertRebuilt();
     }

@@ -20,12 +20,18 @@ internal static class Nights
     /// <summary><c>2026-06-14</c> for 0.</summary>
     public static string Day(int daysBeforeYesterday) => LocalDatePattern.Iso.Format(Date(daysBeforeYesterday));
 
-    /// <summary>Puts a table into the inbox an hour before the morning so many days ago.</summary>
+    /// <summary>Puts a table into the inbox an hour before the morning so many days ago; a version of one that is there, a second after that one at least.</summary>
     /// <returns>Its bytes.</returns>
     public static byte[] PutTable(this WorkingFolder folder, string path, int daysBefore, params IEnumerable<string> lines)
     {
         var bytes = Some.Text(string.Join('\n', lines) + "\n");
-        folder.Put(path, bytes, Duration.FromDays(daysBefore) + Duration.FromHours(1));
+        var earlier = File.GetLastWriteTimeUtc(Path.Combine(folder.Inbox, path));
+        var full = folder.Put(path, bytes, Duration.FromDays(daysBefore) + Duration.FromHours(1));
+        if (File.GetLastWriteTimeUtc(full) <= earlier)
+        {
+            File.SetLastWriteTimeUtc(full, earlier.AddSeconds(1));
+        }
+
         return bytes;
     }
 

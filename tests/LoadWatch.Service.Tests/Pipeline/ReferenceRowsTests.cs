@@ -92,6 +92,25 @@ public sealed class ReferenceRowsTests : IDisposable
         Assert.Equal(LeastSquares(pairs, 12), folder.OnDay("anna", Nights.Day(2)).GetProperty("load").GetDouble(), 6);
     }
 
+    [Theory]
+    [InlineData(10, true)]
+    [InlineData(9, false)]
+    public void ASessionThatOnlyARatingTellsOfTakesItsLoadByALineOfTenPairs(int pairs, bool isKnown)
+    {
+        folder.Edit("loadwatch.json", "\"name\": \"Squad\"", "\"name\": \"Squad\", \"load_fallbacks\": [\"foster_load\"]");
+        var rides = Enumerable.Range(0, pairs).Select(ride => (Date: Nights.Date(40 - (2 * ride)), HeartRate: 120 + (4 * ride), Rating: 2 + (ride / 2))).ToList();
+        folder.Fill(rides.Select(ride => ($"anna/{ride.Date:MMdd}.fit", Some.Fit(ride.Date, heartRate: ride.HeartRate))));
+        folder.PutTable(
+            "sessions.csv", 0,
+            ["date,person,session,sport,minutes,rating", .. rides.Select(ride => $"{ride.Date:uuuu-MM-dd},anna,1,cycling,,{ride.Rating}"), $"{Nights.Day(2)},anna,1,cycling,3,5"]);
+        folder.Sweep();
+
+        var told = folder.Activities("anna").SkipLast(1).Select(one => (X: one.Value("foster_load")!.Value, Y: one.Value("banister_trimp")!.Value)).ToList();
+        var load = folder.OnDay("anna", Nights.Day(2)).GetProperty("load");
+        Assert.Equal(isKnown ? JsonValueKind.Number : JsonValueKind.Null, load.ValueKind);
+        Assert.True(!isKnown || Math.Abs(LeastSquares(told, 15) - load.GetDouble()) < 1e-6, load.ToString());
+    }
+
     /// <summary>The straight line by its definition: slope = covariance / variance, through the means.</summary>
     private static double LeastSquares(List<(double X, double Y)> pairs, double at)
     {

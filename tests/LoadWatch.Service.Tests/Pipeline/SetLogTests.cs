@@ -55,7 +55,7 @@ public sealed class SetLogTests : IDisposable
         folder.PutTable("sets.csv", 0, [Header, .. odd]);
         folder.Sweep();
 
-        Assert.Equal(1, Nights.Count(folder.Brief(), "exercise \"sled_march\": which body regions?"));
+        Assert.Equal(1, Nights.Count(folder.Brief(), "Exercise \"sled_march\": which body regions?"));
         Assert.Contains("2 people", folder.Brief(), StringComparison.Ordinal);
 
         folder.Configure("\"computation\": { \"exercises\": { \"sled_march\": [\"legs\"] } }");

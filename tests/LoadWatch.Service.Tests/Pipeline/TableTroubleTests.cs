@@ -26,12 +26,58 @@ public sealed class TableTroubleTests : IDisposable
         Assert.Equal(ArrivalState.Refused, folder.Arrival(damaged)!.State);
         Assert.Equal(before.Item1, folder.Rows());
         Assert.Equal(before.Item2, folder.Export("activities"));
-        Assert.Contains("gym/sets.csv: not usable: ", folder.Brief(), StringComparison.Ordinal);
+        Assert.Contains("gym/sets.csv: Not usable: ", folder.Brief(), StringComparison.Ordinal);
 
         folder.PutTable("gym/sets.csv", 0, [Named, .. Days(4, day => $"{day},bo,leg_press,10,80")]);
         folder.Sweep(WorkingFolder.Now + Duration.FromMinutes(1));
         Assert.Equal(5, folder.Rows().Count); // The date before the first row is older than what the version speaks for.
         AssertSettled();
+    }
+
+    [Fact]
+    public void AVersionThatCannotBeReadBackIsTriedAgain()
+    {
+        folder.PutTable("sets.csv", 1, Named, $"{Nights.Day(2)},bo,leg_press,10,80");
+        folder.Sweep(Nights.Before(1));
+        var first = folder.ArchiveNames();
+        folder.PutTable("sets.csv", 0, Named, $"{Nights.Day(2)},bo,leg_press,10,90");
+        folder.Sweep();
+        var before = folder.Everything();
+        var latest = WorkingFolder.Files(Path.Combine(folder.Data, "archive")).Single(path => !first.Contains(Path.GetFileName(path)));
+        folder.Write((_, session) =>
+        {
+            session.TableVersions.SetApplied("inbox/sets.csv", []);
+            return true;
+        });
+        var away = Path.Combine(folder.Root, "away");
+        File.Move(latest, away);
+
+        Assert.Contains("cannot be read back", Assert.Single(folder.Sweep().Unreadable).Sentence, StringComparison.Ordinal);
+        Assert.Equal(800, Assert.Single(folder.Activities("bo")).Value("kilograms"));
+        Assert.Single(folder.Sweep().Unreadable);
+
+        File.Move(away, latest);
+        Assert.Empty(folder.Sweep().Unreadable);
+        Assert.Equal(before, folder.Everything());
+    }
+
+    [Theory]
+    [InlineData("zip", "leave")]
+    [InlineData("gz", "move")]
+    public void APackedTableCountsAsTheTableInIt(string packing, string take)
+    {
+        using var other = new WorkingFolder(take);
+        foreach (var kilograms in new[] { 80, 90 })
+        {
+            var table = Some.Text($"{Named}\n{Nights.Day(1)},bo,leg_press,10,{kilograms}\n");
+            other.Put($"gym.{packing}", packing == "zip" ? Some.Zip(("sets.csv", table)) : Some.Gzip(table), Duration.FromMinutes(180 - kilograms));
+            other.Sweep();
+        }
+
+        Assert.Equal(900, Assert.Single(other.Activities("bo")).Value("kilograms"));
+        var before = other.Everything();
+        other.Rebuild();
+        Assert.Equal(before, other.Everything());
     }
 
     [Theory]
@@ -65,7 +111,7 @@ public sealed class TableTroubleTests : IDisposable
     [Fact]
     public void ATableOfNobodyIsHeldAndTakenUpWhenItIsMoved()
     {
-        var table = folder.PutTable("sets.csv", 0, Unnamed, $"{Nights.Day(1)},leg_press,10,80");
+        var table = folder.PutTable("sets.csv", 0, Unnamed, $"{Nights.Day(2)},leg_press,10,80", $"{Nights.Day(1)},leg_press,10,80");
         folder.Sweep();
         Assert.Equal(ArrivalState.Held, folder.Arrival(table)!.State);
         Assert.Contains("a table that names no people", folder.Brief(), StringComparison.Ordinal);
@@ -76,7 +122,11 @@ public sealed class TableTroubleTests : IDisposable
         folder.Sweep();
 
         Assert.Equal((ArrivalState.Stored, "bo"), (folder.Arrival(table)!.State, folder.Arrival(table)!.Person));
-        Assert.Equal(800, Assert.Single(folder.Activities("bo")).Value("kilograms"));
+        Assert.Equal([800, 800], folder.Activities("bo").Select(activity => activity.Value("kilograms")));
+
+        folder.PutTable("bo/sets.csv", 0, Unnamed, $"{Nights.Day(2)},leg_press,10,80");
+        folder.Sweep(WorkingFolder.Now + Duration.FromMinutes(1));
+        Assert.Equal(Nights.Day(2), Assert.Single(folder.Activities("bo")).GetProperty("date").GetString());
         AssertSettled();
     }
 
