@@ -102,8 +102,8 @@ public sealed class DemoSweepTests : IDisposable
         Assert.DoesNotContain("Grip", coach, StringComparison.OrdinalIgnoreCase);
         Assert.DoesNotContain(" ill", coach, StringComparison.OrdinalIgnoreCase);
         Assert.Contains("Niilo Karikallas", coach, StringComparison.Ordinal);
-        Assert.Contains("a rating of 6 of", coach, StringComparison.Ordinal);
-        Assert.Contains("a rating of 4 of", coach, StringComparison.Ordinal);
+        Assert.Contains("A rating of 6 of", coach, StringComparison.Ordinal);
+        Assert.Contains("A rating of 4 of", coach, StringComparison.Ordinal);
 
         Assert.Contains("Grip strength", Page("clinic"), StringComparison.Ordinal);
         Assert.DoesNotContain("Grip strength", Page("physio"), StringComparison.Ordinal);
