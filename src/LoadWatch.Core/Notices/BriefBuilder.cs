@@ -15,12 +15,13 @@ public static class BriefBuilder
     /// <param name="date">The contact's local date on which the brief is due.</param>
     /// <param name="subjects">People; those outside the contact's groups or people are left out.</param>
     /// <param name="questions">Files held or refused and other things that need an answer.</param>
-    public static Brief Build(Contact contact, LocalDate date, IReadOnlyList<BriefSubject> subjects, IReadOnlyList<BriefLine> questions)
+    /// <param name="inboxIsAway">A watched folder cannot be looked into: nobody is named for what may lie in it.</param>
+    public static Brief Build(Contact contact, LocalDate date, IReadOnlyList<BriefSubject> subjects, IReadOnlyList<BriefLine> questions, bool inboxIsAway = false)
     {
         var shown = Shown(contact, subjects);
         var self = contact.Role == ContactRole.Self && shown.Count == 1;
         var upTo = shown.Where(subject => subject.Days.Count > 0).Max(subject => (LocalDate?)subject.Days[^1].Date);
-        var silent = CommonSilence.Of(shown);
+        var silent = CommonSilence.Of(shown, inboxIsAway);
         var flagged = shown.Where(subject => ToLookAt(subject) && !(silent.Contains(subject) && CommonSilence.IsOnlySilent(subject))).OrderByDescending(Worst).ToList();
         var asked = CommonSilence.Lines(shown, silent).Concat(questions).ToList();
         return new Brief

@@ -12,13 +12,13 @@ internal static class CommonSilence
     /// <summary>So many of a group, and half of it, are no coincidence. A choice.</summary>
     private const int Fewest = 5;
 
-    /// <summary>The people of a group whose silence is told in common, by group; each list is empty or long.</summary>
-    public static IReadOnlyList<BriefSubject> Of(IReadOnlyList<BriefSubject> shown) =>
+    /// <summary>The people whose silence is told in common, group by group: many of it, or all of it while an inbox is away, which explains any silence.</summary>
+    public static IReadOnlyList<BriefSubject> Of(IReadOnlyList<BriefSubject> shown, bool inboxIsAway) =>
     [
         .. shown
             .GroupBy(subject => subject.Group.Id, StringComparer.Ordinal)
             .Select(group => (All: group.Count(), Silent: group.Where(IsSilent).ToList()))
-            .Where(group => group.Silent.Count >= Fewest && 2 * group.Silent.Count >= group.All)
+            .Where(group => inboxIsAway || (group.Silent.Count >= Fewest && 2 * group.Silent.Count >= group.All))
             .SelectMany(group => group.Silent),
     ];
 
@@ -30,7 +30,7 @@ internal static class CommonSilence
         .GroupBy(subject => subject.Group.Id, StringComparer.Ordinal)
         .Select(group => new BriefLine(
             group.First().Group.Name,
-            $"recordings of {group.Count()} of {shown.Count(subject => subject.Group.Id == group.Key)} people stay away at once: one upload, inbox or device charger may be the cause; they are not named one by one"));
+            $"recordings of {group.Count()} of {shown.Count(subject => subject.Group.Id == group.Key)} people do not come in: one upload, inbox or charger may be the cause, so they are not named one by one"));
 
     private static bool IsSilent(BriefSubject subject) =>
         subject.Alerts.Any(news => news.Alert.Key.Rule == Rule && AlertLife.IsActive(news.Alert.State) && news.Alert.ShelvedUntil is null);

@@ -21,7 +21,7 @@ public static class BriefCommand
         command.SetAction(parsed =>
         {
             using var workplace = Workplace.OpenToRead(parsed.GetValue(config)!);
-            return Print(workplace, parsed.GetValue(contact), new Briefs(workplace.Configuration, parsed.GetValue(asOf) ?? MachineClock.Now(), []));
+            return Print(workplace, parsed.GetValue(contact), new Briefs(workplace.Configuration, parsed.GetValue(asOf) ?? MachineClock.Now(), [], []));
         });
         return command;
     }

@@ -90,7 +90,8 @@ public static class DemoCommand
         }
 
         Console.Out.WriteLine();
-        BriefCommand.Print(workplace, null, new Briefs(workplace.Configuration, At(demo.Mornings[^1], workplace), report!.Unreadable));
+        var now = At(demo.Mornings[^1], workplace);
+        BriefCommand.Print(workplace, null, new Briefs(workplace.Configuration, now, report!.Unreadable, report.MissingInboxes));
         foreach (var page in report.Pages)
         {
             Console.Out.WriteLine($"Page: {page}");

@@ -14,7 +14,8 @@ namespace LoadWatch.Service.Pipeline;
 
 /// <summary>Builds the briefs of contacts from what is stored, and decides those that are due.</summary>
 /// <param name="unreadable">Files that the sweep could not read, by path.</param>
-public sealed class Briefs(WorkingConfiguration configuration, Instant now, IReadOnlyList<BriefLine> unreadable)
+/// <param name="inboxesAway">Names of inboxes that the sweep could not look into.</param>
+public sealed class Briefs(WorkingConfiguration configuration, Instant now, IReadOnlyList<BriefLine> unreadable, IReadOnlyList<string> inboxesAway)
 {
     private const int DaysBack = 400;
     private const int RemarkDays = 14;
@@ -105,7 +106,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         var told = session.Notices.LastBrief(contact.Id, date)?.AlertPosition ?? 0;
         var news = session.Alerts.Changes.Since(told).ToLookup(change => change.AlertId, StringComparer.Ordinal);
         var subjects = configuration.PeopleOf(contact).Select(person => Subject(session, person, news)).ToList();
-        return BriefBuilder.Build(contact, date, subjects, Questions(session, contact));
+        return BriefBuilder.Build(contact, date, subjects, Questions(session, contact), inboxesAway.Count > 0);
     }
 
     private BriefSubject Subject(StoreSession session, Person person, ILookup<string, AlertChange> news)
@@ -142,6 +143,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         
     [
         .. MissedNotices.Lines(session, contact, Ways(contact), now),
+        .. inboxesAway.Select(inbox => new BriefLine(inbox, "this inbox cannot be looked into: nothing comes in from it until its folder is back")),
         .. Files(session, contact),
         .. new OpenQuestions(configuration).Lines(session, contact, now.InZone(contact.Zone).Date),
         .. contact.People.Count > 0 ? [] : new Answers(configuration, now).Questions(session),

@@ -45,7 +45,7 @@ public sealed class Sweep
         assigned = new AssignedFiles(configuration, store, archive, reader, settlement, Report);
         tables = new Tables(configuration, store, decoder, Report);
         recomputations = new Recomputations(store, archive, reader, settlement);
-        briefs = new Briefs(configuration, now, Report.Unreadable);
+        briefs = new Briefs(configuration, now, Report.Unreadable, Report.MissingInboxes);
     }
 
     public SweepReport Report { get; } = new();

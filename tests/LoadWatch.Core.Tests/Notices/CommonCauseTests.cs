@@ -20,7 +20,7 @@ public class CommonCauseTests
 
         Assert.Empty(brief.Flagged);
         Assert.Equal("squad", brief.Questions[0].Subject);
-        Assert.StartsWith("Recordings of 5 of 8 people stay away at once", brief.Questions[0].Sentence, StringComparison.Ordinal);
+        Assert.StartsWith("Recordings of 5 of 8 people do not come in", brief.Questions[0].Sentence, StringComparison.Ordinal);
     }
 
     [Fact]
@@ -37,6 +37,15 @@ public class CommonCauseTests
     [InlineData(5, 11)]
     public void AFewSilentPeopleAreNamed(int silent, int all) =>
         Assert.Equal(silent, Build(Enumerable.Range(0, all).Select(number => Person(number, silent: number < silent, expected: false))).Flagged.Count);
+
+    [Fact]
+    public void WhileAnInboxIsAwayNobodyIsNamedForSilence()
+    {
+        var people = Enumerable.Range(0, 9).Select(number => Person(number, silent: number == 0, expected: false)).ToList();
+
+        Assert.Empty(BriefBuilder.Build(Ada, Date, people, [], inboxIsAway: true).Flagged);
+        Assert.Single(BriefBuilder.Build(Ada, Date, people, [], inboxIsAway: false).Flagged);
+    }
 
     [Fact]
     public void TheFirstLineSaysHowManyRecordingsOfTheLastPlannedSessionAreIn()
