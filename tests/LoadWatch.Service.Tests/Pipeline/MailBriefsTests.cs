@@ -163,14 +163,14 @@ public sealed class MailBriefsTests : IDisposable
         place.Dispose();
     }
 
-    private int Decide(Instant now, MailWorkplace? other = null) => store.Write(new Briefs((other ?? place).Read(), now, []).Decide);
+    private int Decide(Instant now, MailWorkplace? other = null) => store.Write(new Briefs((other ?? place).Read(), now, [], []).Decide);
 
     private void Raise(string person) => store.Write(session => session.Alerts.Put(MorningExamples.LoadRatio(person).Alert));
 
     private IReadOnlyList<BriefLine> Questions(Instant now)
     {
         var configuration = place.Read();
-        return store.Read(session => new Briefs(configuration, now, []).Build(session, configuration.Contacts[0])).Questions;
+        return store.Read(session => new Briefs(configuration, now, [], []).Build(session, configuration.Contacts[0])).Questions;
     }
 
     private IReadOnlyList<PendingDelivery> Pending() => store.Read(session => session.Notices.PendingDeliveries());

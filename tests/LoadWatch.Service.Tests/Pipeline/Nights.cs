@@ -54,7 +54,7 @@ internal static class Nights
 
     /// <summary>The brief of the only contact as of a moment, in one line.</summary>
     public static string Brief(this WorkingFolder folder, Instant? now = null) => folder.Read((workplace, session) => InOneLine(
-        BriefText.Write(new Briefs(workplace.Configuration, now ?? WorkingFolder.Now, []).Build(session, workplace.Configuration.Contacts[0]))));
+        BriefText.Write(new Briefs(workplace.Configuration, now ?? WorkingFolder.Now, [], []).Build(session, workplace.Configuration.Contacts[0]))));
 
     public static string InOneLine(string text) => string.Join(' ', text.Split((char[]?)null, StringSplitOptions.RemoveEmptyEntries));
 
