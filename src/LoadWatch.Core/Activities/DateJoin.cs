@@ -52,7 +52,7 @@ internal sealed class DateJoin
         }
         else if (!stated.IsBlank)
         {
-            questions.Add(new JoinQuestion(stated.Date, JoinWording.Nowhere(stated)));
+            questions.Add(new JoinQuestion(stated.Date, JoinWording.Nowhere(stated), MayWait: true));
         }
     }
 

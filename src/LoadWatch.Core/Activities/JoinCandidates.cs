@@ -4,7 +4,7 @@ namespace LoadWatch.Activities;
 
 /// <summary>
 /// Which recordings of its date a stated session may belong to. All must fit by sport (<see cref="SportMatch"/>). With a start: those that run at that
-/// time, or begin within half an hour of it (a choice), the latter first. Else with a number: the recording of that number, by start, among those of the
+/// time, begin within half an hour of it (a choice) or before its stated minutes are over, those within half an hour first. Else with a number: the recording of that number, by start, among those of the
 /// best fit; where there are not so many, among all that fit; then among all of the date. Else: those of the best fit that its table does not tell of yet.
 /// </summary>
 internal static class JoinCandidates
@@ -26,7 +26,7 @@ internal static class JoinCandidates
 
     private static List<SessionParts> AtTime(StatedSession stated, LocalTime start, List<SessionParts> recorded, List<SessionParts> fitting)
     {
-        var running = fitting.FindAll(one => RunsAt(one.Recording!, start));
+        var running = fitting.FindAll(one => RunsAt(one.Recording!, start) || BeganWithin(one.Recording!, start, stated.Minutes));
         var beginning = running.FindAll(one => BeginsAt(one.Recording!, start));
         var near = Best(stated, beginning.Count > 0 ? beginning : running);
         return near.Count > 1 && stated.Order is { } order && ByNumber(stated, order, recorded, near) is [var numbered] ? [numbered] : near;
@@ -59,6 +59,10 @@ internal static class JoinCandidates
 
     private static bool RunsAt(RecordedActivity recording, LocalTime start) =>
         BeginsAt(recording, start) || (Since(recording, start) > Slack && Since(recording, start).TotalSeconds <= Seconds(recording));
+
+    /// <summary>A watch switched on late: the recording began while the stated session went on.</summary>
+    private static bool BeganWithin(RecordedActivity recording, LocalTime start, double? minutes) =>
+        Since(recording, start) <= Duration.Zero && -Since(recording, start).TotalMinutes <= (minutes ?? 0);
 
     private static Duration Since(RecordedActivity recording, LocalTime start) =>
         Duration.FromNanoseconds(start.NanosecondOfDay - recording.LocalStart.TimeOfDay.NanosecondOfDay);

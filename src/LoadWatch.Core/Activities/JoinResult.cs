@@ -12,4 +12,5 @@ public sealed record JoinResult(
 
 /// <summary>Rows that could not be joined, as a question to staff.</summary>
 /// <param name="Sentence">Without a name: what is not clear and what would settle it.</param>
-public sealed record JoinQuestion(LocalDate Date, string Sentence);
+/// <param name="MayWait">The recording may only be late: to be asked some days later.</param>
+public sealed record JoinQuestion(LocalDate Date, string Sentence, bool MayWait = false);

@@ -20,7 +20,7 @@ internal static class JoinedSession
         var log = Log(session);
         var content = stated.FirstOrDefault(one => one.Content is not null)?.Content;
         var quantities = Quantities(recording, stated, log);
-        var (regions, isRegionAsked) = JoinedStimulus.Of(recording, log?.Sets, content, sport, settings);
+        var (regions, isRegionAsked) = JoinedStimulus.Of(recording, log is null ? null : WithOtherRegions(log, stated), content, sport, settings);
         var activity = new JoinedActivity
         {
             Key = recording?.Winner.Key ?? KeyOfRows(session.Maker),
@@ -50,6 +50,14 @@ internal static class JoinedSession
                 ? null
                 : best;
     }
+
+    /// <summary>Regions that only another log of the session tells of come from that one: what one sheet leaves out was done all the same.</summary>
+    private static IReadOnlyList<RegionStimulus> WithOtherRegions(StatedSession log, IReadOnlyList<StatedSession> stated) => [.. stated
+        .Where(one => one.Sets is not null)
+        .OrderBy(one => one != log)
+        .ThenBy(one => StatedSets.GradeOf(one.Sets!.Stimulus))
+        .SelectMany(one => one.Sets!.Stimulus)
+        .DistinctBy(region => region.Region)];
 
     private static bool HasSets(ActivityValues values) => values.Quantities.Any(quantity => quantity.Name == QuantityNames.Sets);
 

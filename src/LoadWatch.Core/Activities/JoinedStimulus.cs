@@ -12,11 +12,11 @@ internal static class JoinedStimulus
 {
     private const string Unseen = "nothing recorded it: logged sets or declared content would tell";
 
-    /// <param name="log">The set log that counts, or null.</param>
+    /// <param name="log">What the logged sets of the session asked of each region, or null without any.</param>
     /// <param name="content">As declared, or null.</param>
     /// <returns>Legs first, and whether the content asks for a body region.</returns>
     public static (IReadOnlyList<RegionStimulus> Regions, bool IsRegionAsked) Of(
-        RecordedActivity? recording, StatedSets? log, DeclaredContent? content, Sport sport, ComputationSettings settings)
+        RecordedActivity? recording, IReadOnlyList<RegionStimulus>? log, DeclaredContent? content, Sport sport, ComputationSettings settings)
     {
         var regions = SportRegions.Of(sport, settings.Sports) ?? (sport.IsTeamSport ? [BodyRegion.Legs] : null);
         var seen = Seen(recording?.Values.Stimulus, log, regions);
@@ -31,7 +31,7 @@ internal static class JoinedStimulus
     }
 
     private static IReadOnlyList<RegionStimulus> Seen(
-        IReadOnlyList<RegionStimulus>? recorded, StatedSets? log, IReadOnlyList<BodyRegion>? regions)
+        IReadOnlyList<RegionStimulus>? recorded, IReadOnlyList<RegionStimulus>? log, IReadOnlyList<BodyRegion>? regions)
     {
         if (log is null)
         {
@@ -39,7 +39,7 @@ internal static class JoinedStimulus
         }
 
         var ofPower = (recorded ?? []).Where(region => region.Channel == StimulusChannels.Power);
-        return [.. log.Stimulus.Concat(ofPower)
+        return [.. log.Concat(ofPower)
             .GroupBy(region => region.Region)
             .Select(region => region.OrderBy(one => one.Grade).First())
             .OrderBy(region => region.Region)];

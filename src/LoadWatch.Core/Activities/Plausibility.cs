@@ -40,9 +40,26 @@ public static class Plausibility
             return null;
         }
 
-        return SpeedTop.MetresPerSecond(UsableSamples.Of(recording, Channel.Speed)) is { } top && top > TopSpeedFrom && top > TimesTopSpeed * anchor.Value
+        return HeldForThree(UsableSamples.Of(recording, Channel.Speed)) is { } top && top > TopSpeedFrom && top > TimesTopSpeed * anchor.Value
             ? string.Create(CultureInfo.InvariantCulture, $"top speed {top:0.0} m/s where {anchor.Value:0.0} m/s is the person's: of another person?")
             : null;
+    }
+
+    /// <summary>The top speed that three readings in a row show, at 1 s or more: one jump of a position decides nothing.</summary>
+    private static double? HeldForThree(UsableChannel speed)
+    {
+        if (SpeedTop.MetresPerSecond(speed) is not { } top || speed.Samples.Count < 3)
+        {
+            return null;
+        }
+
+        var three = 0.0;
+        for (var at = 2; at < speed.Samples.Count; at++)
+        {
+            three = Math.Max(three, Math.Min(speed.Samples[at].Value, Math.Min(speed.Samples[at - 1].Value, speed.Samples[at - 2].Value)));
+        }
+
+        return Math.Min(top, three);
     }
 
     private static string? TooHigh(Recording recording, Anchor? anchor)

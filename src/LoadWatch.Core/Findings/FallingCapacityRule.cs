@@ -1,5 +1,6 @@
 // Best of the last 8 weeks against the best of the 8 weeks before, down by more than the error of the figure. Windows and errors of speed and power are a
 // choice; the error of a one-repetition maximum estimated from repetitions is about 10 to 14 % (10.6 to 13.5 % of the mean in a direct test of equations).
+using LoadWatch.Activities;
 using LoadWatch.Days;
 using LoadWatch.Loads;
 using LoadWatch.People;
@@ -10,7 +11,7 @@ namespace LoadWatch.Findings;
 
 /// <summary>
 /// A best has gone down: top speed, top power, the estimated maximum of an exercise. Off in the off-season, in absence and return. It compares what was shown,
-/// not what could be: whoever has not tried shows less.
+/// not what could be: whoever has not tried shows less. Read on recorded days only: time alone neither raises nor ends it (I-6).
 /// </summary>
 public sealed class FallingCapacityRule : IRule
 {
@@ -27,11 +28,27 @@ public sealed class FallingCapacityRule : IRule
         }
 
         return subject.Activities
-            .SelectMany(activity => activity.Quantities.Where(quantity => Percent(quantity.Name, limits) is not null).Select(quantity => new Shown(activity.Date, quantity)))
+            .SelectMany(activity => ShownBy(activity, limits))
             .GroupBy(shown => shown.Quantity.Name, StringComparer.Ordinal)
             .OrderBy(shown => shown.Key, StringComparer.Ordinal)
-            .SelectMany(shown => Evaluate(subject, shown.Key, [.. shown.OrderBy(one => one.Date)], Percent(shown.Key, limits)!.Value));
+            .SelectMany(shown => Evaluate(subject, shown.Key, OfOneSport(shown), Percent(shown.Key, limits)!.Value));
     }
+
+    /// <summary>A walk shows no top speed, and a sensor that writes nought shows nothing.</summary>
+    private static IEnumerable<Shown> ShownBy(JoinedActivity activity, FallingCapacityLimits limits) => activity.Quantities
+        .Where(quantity => Percent(quantity.Name, limits) is not null && quantity.Value > 0)
+        .Where(quantity => quantity.Name != QuantityNames.SpeedTop || activity.Sport.Name is not ("walking" or "hiking"))
+        .Select(quantity => new Shown(activity.Date, activity.Sport.IsTeamSport ? "team" : activity.Sport.Name, quantity));
+
+    /// <summary>The sport with the most sessions: a best on the bicycle says nothing of one on the ergometer.</summary>
+    private static List<Shown> OfOneSport(IEnumerable<Shown> shown) =>
+    [
+        .. shown.GroupBy(one => one.Sport, StringComparer.Ordinal)
+            .OrderByDescending(sport => sport.Count())
+            .ThenBy(sport => sport.Key, StringComparer.Ordinal)
+            .First()
+            .OrderBy(one => one.Date),
+    ];
 
     private static double? Percent(string quantity, FallingCapacityLimits limits) => quantity switch
     {
@@ -43,14 +60,21 @@ public sealed class FallingCapacityRule : IRule
 
     private IEnumerable<Finding> Evaluate(RuleSubject subject, string quantity, List<Shown> shown, double percent)
     {
-        LocalDate? since = null;
+        var run = new FindingRun<Bests>();
         foreach (var day in subject.Days)
         {
-            var read = IsOff(day) ? null : Read(shown, day.Date, subject.Limits.FallingCapacity);
-            since = read is not null && read.FallPercent > percent ? since ?? day.Date : null;
-            if (since is { } start)
+            if (IsOff(day))
             {
-                yield return Find(subject.Person, day.Date, quantity, start, read!, percent, subject.Limits.FallingCapacity);
+                run.End();
+            }
+            else if (day.State == DayState.Recorded && Read(shown, day.Date, subject.Limits.FallingCapacity) is { } read)
+            {
+                run.Read(day.Date, read, read.FallPercent > percent, read.FallPercent > percent);
+            }
+
+            if (run is { Since: { } start, Reading: { } bests })
+            {
+                yield return Find(subject.Person, day.Date, quantity, start, bests, percent, subject.Limits.FallingCapacity);
             }
         }
     }
@@ -105,7 +129,7 @@ public sealed class FallingCapacityRule : IRule
             new("sessions_wanted", limits.SessionsWanted, "count"),
         ]);
 
-    private sealed record Shown(LocalDate Date, Quantity Quantity);
+    private sealed record Shown(LocalDate Date, string Sport, Quantity Quantity);
 
     private sealed record Bests(Shown Late, Shown Early, int LateSessions, int EarlySessions)
     {

@@ -6,7 +6,7 @@ using NodaTime;
 
 namespace LoadWatch.Findings;
 
-/// <summary>Recordings come, but heart rate or power of them cannot be used: strap, sensor or watch want a look. Ends when fewer such sessions lie within the days.</summary>
+/// <summary>Recordings come, but heart rate or power of them cannot be used: strap, sensor or watch want a look. Ends with a recorded day that has fewer such sessions behind it.</summary>
 public sealed class NotUsableRule : IRule
 {
     private static readonly Channel[] Watched = [Channel.HeartRate, Channel.Power];
@@ -20,10 +20,15 @@ public sealed class NotUsableRule : IRule
         var limits = subject.Limits.NotUsable;
         var useless = Useless(subject, limits.UsableShare);
         LocalDate? since = null;
+        List<(LocalDate Date, Channel Channel, double Share)> lately = [];
         foreach (var day in useless.Count == 0 ? [] : subject.Days)
         {
-            var lately = useless.FindAll(one => one.Date > day.Date.PlusDays(-limits.Days) && one.Date <= day.Date);
-            since = lately.Count >= limits.Sessions ? since ?? day.Date : null;
+            if (day.State == DayState.Recorded)
+            {
+                lately = useless.FindAll(one => one.Date > day.Date.PlusDays(-limits.Days) && one.Date <= day.Date);
+                since = lately.Count >= limits.Sessions ? since ?? day.Date : null;
+            }
+
             if (since is { } start)
             {
                 yield return Find(subject, day, start, lately, limits);
@@ -41,6 +46,7 @@ public sealed class NotUsableRule : IRule
     /// <summary>One entry a session: the poorest of its channels. Heart rate that is not to be used for this person is not missed.</summary>
     private static IEnumerable<(LocalDate Date, Channel Channel, double Share)> Poorest(RuleSubject subject, JoinedActivity activity, double wanted) => activity.UsableShare
         .Where(share => Watched.Contains(share.Key) && share.Value < wanted)
+        .Where(share => share.Key != Channel.Power || !activity.Sport.IsOnFoot)
         .Where(share => share.Key != Channel.HeartRate || subject.Person.HeartRateIsValidOn(activity.Date))
         .OrderBy(share => share.Value)
         .ThenBy(share => share.Key)
@@ -61,7 +67,7 @@ public sealed class NotUsableRule : IRule
             lately.Count,
             limits.Sessions,
             "sessions",
-            $"Too little usable {channels} in {lately.Count} sessions of the last {limits.Days} days, last on {Wording.Date(lately[^1].Date, day.Date)}: no load from them.",
+            $"Too little usable {channels} in {lately.Count} sessions of the last {limits.Days} days, last on {Wording.Date(lately[^1].Date, day.Date)}: nothing was read from it.",
             new Evidence(
                 "sessions of the last days with a recorded channel usable for less than the wanted share of its time",
                 "a choice",

@@ -6,7 +6,7 @@ namespace LoadWatch.Findings;
 internal static class PlanPhases
 {
     /// <summary>Ill, injured or away, or in the days after the return: comparisons with the weeks just before say nothing.</summary>
-    public static bool IsAwayOrReturning(this DayPlan plan) => plan.Absence is not null || plan.ReturnDay is not null;
+    public static bool IsAwayOrReturning(this DayPlan plan) => plan.Absence is not null || plan.ReturnDay is not null || plan.IsIn(PlanWord.Returning);
 
     /// <summary>Little load is meant.</summary>
     public static bool IsLight(this DayPlan plan) => plan.IsIn(PlanWord.LightWeek) || plan.IsIn(PlanWord.OffSeason);

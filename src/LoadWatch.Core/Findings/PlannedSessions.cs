@@ -27,7 +27,7 @@ internal sealed class PlannedSessions(SilenceLimits limits)
             lastExpected = day.Date;
         }
 
-        if (day.State == DayState.Recorded)
+        if (day.State == DayState.Recorded || day.Plan.Absence is not null)
         {
             without.Clear();
         }

@@ -20,9 +20,11 @@ public sealed class SilenceRule : IRule
         var recorded = new List<LocalDate>();
         RecordingRhythm? rhythm = null;
         var planned = new PlannedSessions(limits.Silence);
+        var silent = 0;
         foreach (var day in days)
         {
             planned.Add(day);
+            silent = day.State == DayState.Recorded ? 0 : day.Plan.Absence is null && day.Plan.RestStatedBy is null ? silent + 1 : silent;
             if (day.State == DayState.Recorded)
             {
                 recorded.Add(day.Date);
@@ -39,25 +41,25 @@ public sealed class SilenceRule : IRule
                     yield return FindPlanned(person, day, planned.Missed, limits.Silence);
                 }
             }
-            else if (rhythm is not null && day.DaysSinceRecorded > rhythm.LimitDays)
+            else if (rhythm is not null && silent > rhythm.LimitDays)
             {
-                yield return Find(person, day, rhythm, limits.Silence);
+                yield return Find(person, day, silent, rhythm, limits.Silence);
             }
         }
     }
 
-    private Finding Find(Person person, Day day, RecordingRhythm rhythm, SilenceLimits limits) => new(
+    private Finding Find(Person person, Day day, int silent, RecordingRhythm rhythm, SilenceLimits limits) => new(
         person.Id,
         day.Date,
         Name,
         Region: null,
         Severity.Notice,
-        rhythm.LastRecorded.PlusDays(rhythm.LimitDays + 1),
-        day.DaysSinceRecorded!.Value,
+        day.Date.PlusDays(rhythm.LimitDays + 1 - silent),
+        silent,
         rhythm.LimitDays,
         "days",
-        Sentence(day, rhythm),
-        Basis(day, rhythm, limits));
+        Sentence(silent, rhythm),
+        Basis(silent, rhythm, limits));
 
     private Finding FindPlanned(Person person, Day day, IReadOnlyList<LocalDate> missed, SilenceLimits limits) => new(
         person.Id,
@@ -79,18 +81,18 @@ public sealed class SilenceRule : IRule
                 new("planned_wait", limits.PlannedWaitDays, "days"),
             ]));
 
-    private static string Sentence(Day day, RecordingRhythm rhythm)
+    private static string Sentence(int silent, RecordingRhythm rhythm)
     {
         var usual = rhythm.UsualGapDays == 1 ? "usually one every day" : $"usually one at least every {Wording.Days(rhythm.UsualGapDays)}";
-        return $"No recording for {Wording.Days(day.DaysSinceRecorded!.Value)}; {usual}.";
+        return $"No recording for {Wording.Days(silent)}; {usual}.";
     }
 
-    private static Evidence Basis(Day day, RecordingRhythm rhythm, SilenceLimits limits) => new(
-        "days since the last recorded day, against a quantile of the gaps between recorded days before it (nearest rank upward) + extra days, "
+    private static Evidence Basis(int silent, RecordingRhythm rhythm, SilenceLimits limits) => new(
+        "days since the last recorded day without those of absence and of stated rest, against a quantile of the gaps between recorded days before it (nearest rank upward) + extra days, "
             + "at most the ceiling",
         "a choice",
         [
-            new("days_since_recorded", day.DaysSinceRecorded, "days", $"last on {Wording.IsoDate(rhythm.LastRecorded)}"),
+            new("silent_days", silent, "days", $"last on {Wording.IsoDate(rhythm.LastRecorded)}"),
             new("usual_gap", rhythm.UsualGapDays, "days", "the quantile of the gaps"),
             new("gaps", rhythm.Gaps, "count"),
             new("limit", rhythm.LimitDays, "days"),

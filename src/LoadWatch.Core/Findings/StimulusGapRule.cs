@@ -8,7 +8,8 @@ namespace LoadWatch.Findings;
 
 /// <summary>
 /// Too long without heavy or fast work of a region, legs first. Only a heavy-or-fast day ends it. A day on which nothing is known, or a gap
-/// that is known too sparsely, neither raises nor worsens nor clears it: the last known state stands (I-6).
+/// that is known too sparsely, neither raises nor worsens nor clears it: the last known state stands (I-6). Off in absence and return: nobody is sent to heavy work
+/// in the first days back.
 /// </summary>
 public sealed class StimulusGapRule : IRule
 {
@@ -27,7 +28,11 @@ public sealed class StimulusGapRule : IRule
         Gap? read = null;
         for (var index = 0; index < days.Count; index++)
         {
-            if (Read(person, region, days, index, limits) is { } gap)
+            if (days[index].Plan.IsAwayOrReturning())
+            {
+                (since, read) = (null, null);
+            }
+            else if (Read(person, region, days, index, limits) is { } gap)
             {
                 read = gap;
                 since = gap.Days == 0 ? null : since ?? (gap.Days >= gap.Limit.NoticeDays ? gap.Date : null);

@@ -18,6 +18,9 @@ public sealed class StimulusLowRule : IRule
     private const int Window = 14;
     private const int UsualDays = 56;
 
+    /// <summary>Readable dates in a row before it is raised: one visit a day late raises nothing. A choice.</summary>
+    private const int OnDays = 3;
+
     private static readonly BodyRegion[] Regions = [BodyRegion.Legs];
 
     public string Name => "stimulus_low";
@@ -33,17 +36,19 @@ public sealed class StimulusLowRule : IRule
         var first = series.FindIndex(day => day.DaysSince.HasValue);
         LocalDate? since = null;
         Count? read = null;
+        var low = 0;
         for (var index = first; index >= 0 && index < series.Count; index++)
         {
             var day = subject.Days[index];
             if (IsOff(day))
             {
-                (since, read) = (null, null);
+                (since, read, low) = (null, null, 0);
             }
             else if (index - first >= subject.Limits.StimulusLow.HistoryDays && !(since is null && TheGapTellsIt(subject, day, series[index])) && Read(subject, series, first, index) is { } count)
             {
                 read = count;
-                since = count.IsLow ? since ?? day.Date : null;
+                low = count.IsLow ? low + 1 : 0;
+                since = low == 0 ? null : since ?? (low >= OnDays ? day.Date : null);
             }
 
             if (since is { } start && read is not null)
@@ -72,7 +77,7 @@ public sealed class StimulusLowRule : IRule
         }
 
         var (before, knownBefore) = Heavy(series, Math.Max(first, index - Window - UsualDays + 1), index - Window);
-        var usual = knownBefore == 0 ? (double?)null : Significant.Round((double)before / knownBefore * Window);
+        var usual = knownBefore < Significant.Round(limits.CoveredShare * UsualDays) ? (double?)null : Significant.Round((double)before / knownBefore * Window);
         var age = subject.Person.AgeOn(subject.Days[index].Date);
         var floor = age >= limits.OlderFrom ? limits.OlderFloorDays : limits.FloorDays;
         return new Count(subject.Days[index].Date, heavy, known, usual, age, floor, Math.Max(floor, Significant.Round(limits.UsualShare * (usual ?? 0))));
@@ -107,7 +112,7 @@ public sealed class StimulusLowRule : IRule
     {
         var usual = count.UsualDays is { } days ? $"usually {Wording.Number(days)}" : "their usual is not known yet";
         var until = count.Date == date ? "" : $" up to {Wording.Date(count.Date, date)}, not known since";
-        return $"Heavy or fast {Wording.Work(region)} on {Wording.Days(count.Heavy)} of 14{until}; {usual}, at least {Wording.Number(count.Limit)} expected. "
+        return $"Heavy or fast {Wording.Work(region)} on {Wording.Days(count.Heavy)} of 14{until}; {usual}, the limit is {Wording.Number(count.Limit)}. "
             + $"So since {Wording.Date(since, date)}.";
     }
 

@@ -10,11 +10,14 @@ namespace LoadWatch.Loads;
 /// </summary>
 public sealed class LoadOrder
 {
+    private const int LastLineMonths = 36;
+
     private readonly string wanted;
     private readonly IReadOnlyList<string> fallbacks;
     private readonly IReadOnlyList<string> fallbacksWithoutHeartRate;
     private readonly Func<LocalDate, bool> heartRateValid;
     private readonly Lazy<SessionLoads[]> sessions;
+    private readonly Lazy<LocalDate?> firstWanted;
     private readonly Dictionary<string, LoadPairs> pairs = new(StringComparer.Ordinal);
     private readonly Dictionary<(LocalDate Month, string From), ConversionLine?> lines = [];
 
@@ -30,6 +33,7 @@ public sealed class LoadOrder
         fallbacksWithoutHeartRate = [.. fallbacks.Prepend(QuantityNames.FosterLoad).Where(name => !QuantityNames.IsOfHeartRate(name))];
         this.heartRateValid = heartRateValid;
         this.sessions = new Lazy<SessionLoads[]>(() => [.. sessions.Select(WithoutInvalid)]);
+        firstWanted = new Lazy<LocalDate?>(FirstWanted);
     }
 
     /// <summary>The load of a session, or null where it has neither the quantity nor a fallback with a line.</summary>
@@ -42,16 +46,30 @@ public sealed class LoadOrder
 
     private ChosenLoad? Converted(SessionLoads session)
     {
-        foreach (var from in heartRateValid(session.Date) ? fallbacks : fallbacksWithoutHeartRate)
+        var isValid = heartRateValid(session.Date);
+        foreach (var from in isValid ? fallbacks : fallbacksWithoutHeartRate)
         {
-            if (session[from] is { } there && Line(session.Date, from) is { } line)
+            if (session[from] is { } there && (isValid ? Line(session.Date, from) : LastLine(session.Date, from)) is { } line)
             {
                 return new ChosenLoad(line.Apply(there.Value), Estimated: true, from, line);
             }
         }
 
-        return null;
+        return isValid || !QuantityNames.IsOfHeartRate(wanted) || firstWanted.Value <= session.Date || session[QuantityNames.FosterLoad] is not { } rated
+            ? null
+            : new ChosenLoad(rated.Value, Estimated: true, QuantityNames.FosterLoad, Line: null);
     }
+
+    /// <summary>Since heart rate is not valid no new pairs come: the last line that there was goes on.</summary>
+    private ConversionLine? LastLine(LocalDate date, string from) => Enumerable.Range(0, LastLineMonths)
+        .Select(months => Line(date.PlusMonths(-months), from))
+        .FirstOrDefault(line => line is not null);
+
+    /// <summary>
+    /// The first date with a load of the group's kind; null without any: such a person has a series of ratings, in their own unit. Mixed with converted ones
+    /// it would break.
+    /// </summary>
+    private LocalDate? FirstWanted() => sessions.Value.Where(session => session[wanted] is not null).Min(session => (LocalDate?)session.Date);
 
     private ConversionLine? Line(LocalDate date, string from)
     {

@@ -30,7 +30,7 @@ public static class BriefBuilder
             ContactName = OneLine.Of(contact.Name),
             Date = date,
             DataUpTo = upTo,
-            FirstLine = FirstLine.Of(shown, flagged, upTo, asked, self),
+            FirstLine = FirstLine.Of(shown, flagged, silent.Count, upTo, asked, self),
             Flagged = [.. flagged.Take(FlaggedAtMost).Select(subject => Flag(subject, contact.Role, self))],
             FlaggedBeyond = Math.Max(0, flagged.Count - FlaggedAtMost),
             Returned = [.. shown.SelectMany(subject => Returned(subject, self))],

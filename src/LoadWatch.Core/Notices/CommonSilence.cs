@@ -1,4 +1,6 @@
 using LoadWatch.Alerts;
+using LoadWatch.Days;
+using NodaTime;
 
 namespace LoadWatch.Notices;
 
@@ -12,15 +14,28 @@ internal static class CommonSilence
     /// <summary>So many of a group, and half of it, are no coincidence. A choice.</summary>
     private const int Fewest = 5;
 
+    private const int WithinDays = 3;
+
     /// <summary>The people whose silence is told in common, group by group: many of it, or all of it while an inbox is away, which explains any silence.</summary>
     public static IReadOnlyList<BriefSubject> Of(IReadOnlyList<BriefSubject> shown, bool inboxIsAway) =>
     [
         .. shown
             .GroupBy(subject => subject.Group.Id, StringComparer.Ordinal)
-            .Select(group => (All: group.Count(), Silent: group.Where(IsSilent).ToList()))
-            .Where(group => inboxIsAway || (group.Silent.Count >= Fewest && 2 * group.Silent.Count >= group.All))
-            .SelectMany(group => group.Silent),
+            .SelectMany(group => inboxIsAway ? group.Where(IsSilent) : AtOnce([.. group])),
     ];
+
+    /// <summary>The largest number of people whose last recordings lie within three days: who stopped weeks apart has a cause of their own.</summary>
+    private static IReadOnlyList<BriefSubject> AtOnce(IReadOnlyList<BriefSubject> group)
+    {
+        var silent = group.Where(IsSilent).Select(subject => (Subject: subject, Last: LastRecorded(subject))).OrderBy(one => one.Last).ToList();
+        var together = silent
+            .Select(first => silent.FindAll(one => one.Last >= first.Last && one.Last <= first.Last.PlusDays(WithinDays)))
+            .MaxBy(those => those.Count) ?? [];
+        return together.Count >= Fewest && 2 * together.Count >= group.Count ? [.. together.Select(one => one.Subject)] : [];
+    }
+
+    private static LocalDate LastRecorded(BriefSubject subject) =>
+        subject.Days.Where(day => day.State == DayState.Recorded).Select(day => day.Date).DefaultIfEmpty(LocalDate.MinIsoValue.PlusDays(1)).Max();
 
     /// <summary>Whether silence is the only reason to look at somebody.</summary>
     public static bool IsOnlySilent(BriefSubject subject) => BriefBuilder.Active(subject).All(news => news.Alert.Key.Rule == Rule);

@@ -10,14 +10,15 @@ internal static class FirstLine
 {
     /// <param name="shown">Everybody in the brief.</param>
     /// <param name="flagged">Those to act on.</param>
+    /// <param name="silent">People whose silence is told in common.</param>
     /// <param name="upTo">The last date looked at.</param>
     /// <param name="questions">Things that need an answer.</param>
     public static string Of(
-        IReadOnlyList<BriefSubject> shown, IReadOnlyList<BriefSubject> flagged, LocalDate? upTo, IReadOnlyList<BriefLine> questions, bool self)
+        IReadOnlyList<BriefSubject> shown, IReadOnlyList<BriefSubject> flagged, int silent, LocalDate? upTo, IReadOnlyList<BriefLine> questions, bool self)
     {
         var sentences = new[]
         {
-            self ? OfOne(shown[0], flagged.Count > 0) : OfMany(shown.Count, flagged),
+            self ? OfOne(shown[0], flagged.Count > 0) : OfMany(shown.Count, flagged, silent),
             SeenEarlier(shown, self),
             Planned(shown, upTo, self),
             Unseen(shown, upTo, self),
@@ -31,9 +32,10 @@ internal static class FirstLine
         ? $"To look at: {string.Join("; ", BriefBuilder.Active(subject).Select(news => RuleTexts.Named(news.Alert.Key, self: true)))}."
         : "All quiet: nothing to act on.";
 
-    private static string OfMany(int people, IReadOnlyList<BriefSubject> flagged) => (people, flagged.Count) switch
+    private static string OfMany(int people, IReadOnlyList<BriefSubject> flagged, int silent) => (people, flagged.Count) switch
     {
         (0, _) => "Nobody is in this brief yet.",
+        (_, 0) when silent > 0 => $"Recordings of {silent} of {people} do not come in; nothing else to act on.",
         (_, 0) => $"All quiet: {People(people)}, nothing to act on.",
         _ => $"{flagged.Count} of {people} to look at: {string.Join(", ", Counts(flagged))}.",
     };

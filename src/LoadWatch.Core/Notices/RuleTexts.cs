@@ -130,7 +130,7 @@ public static class RuleTexts
 
     private static string? Pause(string rule, DayPlan plan) => rule switch
     {
-        LoadRatio or WeeklyJump or FallingLoad when plan.IsAwayOrReturning() => "while away or returning",
+        LoadRatio or WeeklyJump or FallingLoad or StimulusGap or StimulusLow or FallingCapacity when plan.IsAwayOrReturning() => "while away or returning",
         FallingLoad when plan.IsLight() => "in light weeks and the off-season",
         _ => null,
     };

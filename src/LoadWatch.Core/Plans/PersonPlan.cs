@@ -18,6 +18,7 @@ public sealed class PersonPlan
         [PlanWord.Camp, PlanWord.Travel, PlanWord.LightWeek, PlanWord.OffSeason, PlanWord.Returning, PlanWord.ProgrammeStart];
 
     private ILookup<LocalDate, PlanEntry>? byDate;
+    private IReadOnlyList<LocalDate>? ends;
 
     public static PersonPlan None { get; } = new() { Entries = [] };
 
@@ -62,7 +63,7 @@ public sealed class PersonPlan
     /// <summary>Counted from the latest of what says that the person is back: the end of a break, a return as told, a planned return.</summary>
     private int? ReturnDay(LocalDate date, List<PlanEntry> entries)
     {
-        var firsts = Absences.Where(IsBreak).Select(absence => absence.Until!.Value.PlusDays(1))
+        var firsts = (ends ??= [.. EndsOfBreaks()])
             .Concat(Returns)
             .Concat(entries.Where(entry => entry.Word == PlanWord.Returning).Select(entry => entry.From))
             .Where(first => first <= date)
@@ -71,8 +72,34 @@ public sealed class PersonPlan
         return day <= ReturnDays ? day : null;
     }
 
-    private static bool IsBreak(Absence absence) =>
-        absence.Until is { } until && Period.DaysBetween(absence.From, until) + 1 >= BreakDays;
+    /// <summary>The first date after each break. Ill and then injured is one break: absences that adjoin or overlap are measured together.</summary>
+    private IEnumerable<LocalDate> EndsOfBreaks()
+    {
+        LocalDate? from = null;
+        LocalDate until = default;
+        foreach (var absence in Absences.Where(absence => absence.Until is not null).OrderBy(absence => absence.From))
+        {
+            if (from is { } began && absence.From > until.PlusDays(1))
+            {
+                if (IsBreak(began, until))
+                {
+                    yield return until.PlusDays(1);
+                }
+
+                from = null;
+            }
+
+            until = from is null ? absence.Until!.Value : LocalDate.Max(until, absence.Until!.Value);
+            from ??= absence.From;
+        }
+
+        if (from is { } last && IsBreak(last, until))
+        {
+            yield return until.PlusDays(1);
+        }
+    }
+
+    private static bool IsBreak(LocalDate from, LocalDate until) => Period.DaysBetween(from, until) + 1 >= BreakDays;
 
     private ILookup<LocalDate, PlanEntry> Spread() => Entries
         .SelectMany(entry => Enumerable.Range(0, Math.Clamp(Period.DaysBetween(entry.From, entry.Until) + 1, 1, LongestDays)).Select(day => (Date: entry.From.PlusDays(day), entry)))

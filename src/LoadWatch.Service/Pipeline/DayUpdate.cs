@@ -19,6 +19,9 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
 
     private const int PeopleInOneCommit = 50;
 
+    /// <summary>Recordings of squads are often uploaded two days later.</summary>
+    private const int WaitDays = 2;
+
     private TableBasis basis = null!;
     private IReadOnlyDictionary<string, PersonPlan> plans = null!;
 
@@ -82,7 +85,7 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
     private static IEnumerable<Question> Questions(Person person, JoinResult training)
     {
         var last = training.Activities.Count == 0 ? (LocalDate?)null : training.Activities[^1].Date;
-        return training.Questions.Select(question => new Question(person.Id, question.Date, question.Sentence))
+        return training.Questions.Select(question => new Question(person.Id, question.MayWait ? question.Date.PlusDays(WaitDays) : question.Date, question.Sentence))
             .Concat(last is { } date
                 ? training.UnknownExercises.Select(word => new Question(person.Id, date, $"exercise \"{word}\": which body regions? A line under computation, exercises tells"))
                 : []);

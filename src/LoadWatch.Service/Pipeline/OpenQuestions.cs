@@ -19,7 +19,7 @@ public sealed class OpenQuestions(WorkingConfiguration configuration)
         var people = configuration.PeopleOf(contact).ToDictionary(person => person.Id, StringComparer.Ordinal);
         var from = today.PlusDays(-DaysBack);
         return session.Questions.Since(from)
-            .Where(question => people.ContainsKey(question.Person))
+            .Where(question => people.ContainsKey(question.Person) && question.Date <= today)
             .GroupBy(question => question.Sentence, StringComparer.Ordinal)
             .Select(same => new BriefLine(Named([.. same.Select(question => people[question.Person].Name).Distinct(StringComparer.Ordinal)]), same.Key))
             .Concat(contact.People.Count > 0 ? [] : [.. OfContents(session, from), .. OfNobody(session, from)]);

@@ -41,11 +41,15 @@ public sealed record PersonSeries(IReadOnlyList<Day> Days, IReadOnlyList<Finding
     private static List<ActivityOnDay> Counted(Person person, string quantity, IReadOnlyList<string> fallbacks, List<JoinedActivity> activities)
     {
         var order = new LoadOrder(quantity, fallbacks, activities.ConvertAll(Loads), person.HeartRateIsValidOn);
-        return activities.ConvertAll(activity => OnDay(activity, order));
+        return activities.ConvertAll(activity => OnDay(activity, order, quantity));
     }
 
     private static SessionLoads Loads(JoinedActivity activity) => new(activity.Date, activity.Quantities);
 
-    private static ActivityOnDay OnDay(JoinedActivity activity, LoadOrder order) => new(
-        activity.Key, activity.Date, activity.Sources, order.Choose(Loads(activity))?.Value, activity.Stimulus, activity.AddsLoad);
+    /// <summary>What a session of its sport cannot hold is none: a ride lifts no kilograms.</summary>
+    private static ActivityOnDay OnDay(JoinedActivity activity, LoadOrder order, string quantity)
+    {
+        var load = order.Choose(Loads(activity))?.Value ?? (QuantitySports.MayHold(quantity, activity.Sport) ? null : 0);
+        return new ActivityOnDay(activity.Key, activity.Date, activity.Sources, load, activity.Stimulus, activity.AddsLoad);
+    }
 }

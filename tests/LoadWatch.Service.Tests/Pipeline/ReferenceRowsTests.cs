@@ -53,6 +53,24 @@ public sealed class ReferenceRowsTests : IDisposable
     }
 
     [Fact]
+    public void AHeldRecordingThatIsAssignedToItsOwnerIsTakenAsItIs()
+    {
+        var ride = Some.Fit(Nights.Date(2));
+        folder.PutTable("tests.csv", 0, Tests, $"{Nights.Day(5)},cara,heart_rate_max,110,bpm,,");
+        folder.Put("cara/ride.fit", ride);
+        folder.Sweep();
+        Assert.Null(folder.Arrival(ride)!.Person);
+
+        folder.Assign(ride, "cara");
+        folder.Sweep();
+
+        Assert.Single(folder.Activities("cara"));
+        var before = folder.Everything();
+        folder.Rebuild();
+        Assert.Equal(before, folder.Everything());
+    }
+
+    [Fact]
     public void AHeldRecordingIsTakenUpWhenTheReferenceValueIsCorrected()
     {
         var ride = Some.Fit(Nights.Date(2));
