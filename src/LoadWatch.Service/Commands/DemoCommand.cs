@@ -1,4 +1,5 @@
 using System.CommandLine;
+using System.Globalization;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Demo;
 using LoadWatch.Service.Pipeline;
@@ -9,8 +10,8 @@ namespace LoadWatch.Service.Commands;
 /// <summary><c>loadwatch demo</c>: the main job on invented people.</summary>
 public static class DemoCommand
 {
-    /// <summary>The morning at which the demo looks at its night.</summary>
-    private static readonly LocalTime Morning = new(7, 30);
+    /// <summary>The time of the morning at which the demo looks at its night.</summary>
+    private static readonly LocalTime SweptAt = new(7, 30);
 
     public static Command Create()
     {
@@ -40,15 +41,20 @@ public static class DemoCommand
             return ExitCode.CannotCreate;
         }
 
-        var summary = DemoFolder.Write(folder, seed, until);
+        var demo = new DemoFolder(folder, seed, until);
+        demo.Arrive(demo.Mornings[0]);
         DemoMark.Set(folder);
-        Console.Out.WriteLine($"Demo, all people invented: {summary.People} people, {summary.Files} files in {folder}");
         var config = Path.Combine(folder, "loadwatch.json");
-        if (!filesOnly)
+        if (filesOnly)
         {
-            Sweep(config, until, cancel);
+            Arrive(demo);
+        }
+        else
+        {
+            Sweep(demo, config, cancel);
         }
 
+        Tell(demo.Summary);
         Console.Out.WriteLine();
         Console.Out.WriteLine("Next:");
         foreach (var next in filesOnly ? ["sweep"] : new[] { "people", "alerts", "explain PERSON" })
@@ -59,17 +65,50 @@ public static class DemoCommand
         return ExitCode.Ok;
     }
 
-    private static void Sweep(string config, LocalDate until, CancellationToken cancel)
+    private static void Arrive(DemoFolder demo)
+    {
+        foreach (var morning in demo.Mornings.Skip(1))
+        {
+            demo.Arrive(morning);
+        }
+    }
+
+    /// <summary>A sweep on every morning; the last one's brief is shown.</summary>
+    private static void Sweep(DemoFolder demo, string config, CancellationToken cancel)
     {
         using var workplace = Workplace.OpenToWork(config);
-        var now = until.At(Morning).InZoneLeniently(workplace.Configuration.Contacts[0].Zone).ToInstant();
-        var report = workplace.NewSweep(now).Run(cancel);
-        Console.Out.WriteLine(SweepCommand.Counts(report));
+        SweepReport? report = null;
+        foreach (var morning in demo.Mornings)
+        {
+            if (report is not null)
+            {
+                demo.Arrive(morning);
+            }
+
+            report = workplace.NewSweep(At(morning, workplace)).Run(cancel);
+            Console.Out.WriteLine($"{Morning(morning)}: {SweepCommand.Counts(report)}");
+        }
+
         Console.Out.WriteLine();
-        BriefCommand.Print(workplace, null, new Briefs(workplace.Configuration, now, report.Unreadable, report.MissingInboxes));
+        var now = At(demo.Mornings[^1], workplace);
+        BriefCommand.Print(workplace, null, new Briefs(workplace.Configuration, now, report!.Unreadable, report.MissingInboxes));
         foreach (var page in report.Pages)
         {
             Console.Out.WriteLine($"Page: {page}");
+        }
+    }
+
+    private static Instant At(LocalDate morning, Workplace workplace) => morning.At(SweptAt).InZoneLeniently(workplace.Configuration.Contacts[0].Zone).ToInstant();
+
+    private static string Morning(LocalDate date) => date.ToString("d MMMM", CultureInfo.InvariantCulture);
+
+    private static void Tell(DemoSummary summary)
+    {
+        Console.Out.WriteLine();
+        Console.Out.WriteLine($"Demo, all people invented: {summary.People} people, {summary.Files} files in {summary.Folder}. What happens:");
+        foreach (var line in summary.Story)
+        {
+            Console.Out.WriteLine($"- {line}");
         }
     }
 }

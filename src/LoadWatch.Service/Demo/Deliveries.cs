@@ -13,17 +13,19 @@ internal static class Deliveries
 
     private static readonly LocalDateTimePattern Stamp = LocalDateTimePattern.CreateWithInvariantCulture("uuuu-MM-dd-HHmm");
 
-    /// <summary>Uploads are through by then, local time of the day after the session.</summary>
-    private static readonly LocalTime UploadedBy = new(4, 30);
-
     public static IEnumerable<DemoFile> Of(DemoPerson person, int seed, LocalDate until)
     {
         var packed = new List<DemoFile>();
         foreach (var activity in DemoSessions.Of(person, seed, until))
         {
-            var date = Local(activity).Date;
-            switch (DeliveryPlan.Of(person.Part.Id, Period.DaysBetween(date, until), date.DayOfWeek, activity.Sets.Count > 0))
+            switch (Way(person, activity, until))
             {
+                case Delivery.Pod:
+                    yield return Placed(Fit(person, activity), $"inbox/{DemoPods.Folder}/{Stamp.Format(Local(activity))}-pod-{activity.Device.Serial}.fit");
+                    break;
+                case Delivery.Laptop:
+                    yield return Placed(Fit(person, activity), $"inbox/{LaptopPath(Local(activity))}");
+                    break;
                 case Delivery.Packed:
                     packed.Add(Fit(person, activity));
                     break;
@@ -53,6 +55,22 @@ internal static class Deliveries
 
         if (packed.Count > 0)
             yield return Archive(packed);
+    }
+
+    /// <summary>Where the club's laptop puts a session, below the inbox.</summary>
+    public static string LaptopPath(PlannedSession planned) => LaptopPath(planned.Start);
+
+    private static string LaptopPath(LocalDateTime start) => $"_club-laptop/{Stamp.Format(start)}.fit";
+
+    private static Delivery Way(DemoPerson person, FitActivity activity, LocalDate until)
+    {
+        var date = Local(activity).Date;
+        if (DemoPods.Of(person.Part.Id, date) is not null)
+            return Delivery.Pod;
+
+        return DeliveryPlan.IsLeftOnLaptop(person.Part, date, until)
+            ? Delivery.Laptop
+            : DeliveryPlan.Of(person.Part.Id, Period.DaysBetween(date, until), date.DayOfWeek, activity.Sets.Count > 0);
     }
 
     /// <summary>A file of the person, in the folder of that name.</summary>
@@ -94,6 +112,8 @@ internal static class Deliveries
         return new DemoFile(files[0].Path[..(files[0].Path.LastIndexOf('/') + 1)] + "week.zip", bytes.ToArray(), files[^1].Modified);
     }
 
+    private static DemoFile Placed(DemoFile file, string path) => file with { Path = path };
+
     private static DemoFile Renamed(DemoFile file, string before)
     {
         var name = file.Path.LastIndexOf('/') + 1;
@@ -110,6 +130,5 @@ internal static class Deliveries
 
     private static LocalDateTime Local(FitActivity activity) => activity.Start.InZone(DemoPerson.Zone).LocalDateTime;
 
-    private static Instant Modified(FitActivity activity) =>
-        (Local(activity).Date.PlusDays(1) + UploadedBy).InZoneLeniently(DemoPerson.Zone).ToInstant();
+    private static Instant Modified(FitActivity activity) => DemoCalendar.Written(Local(activity).Date.PlusDays(1));
 }

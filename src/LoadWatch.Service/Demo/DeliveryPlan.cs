@@ -25,6 +25,12 @@ internal enum Delivery
 
     /// <summary>As a whole file, and as one of which the end is missing.</summary>
     AlsoCut,
+
+    /// <summary>As a FIT file in the folder of the pods, which names nobody.</summary>
+    Pod,
+
+    /// <summary>As a FIT file in a folder that names nobody, and whose device nobody knows.</summary>
+    Laptop,
 }
 
 /// <summary>Whose sessions come by another way than most, and when.</summary>
@@ -44,6 +50,10 @@ internal static class DeliveryPlan
         _ => Delivery.File,
     };
 
+    /// <summary>The Saturday row of the first week back from the brief that is more than a few days old.</summary>
+    public static bool IsLeftOnLaptop(DemoPart part, LocalDate date, LocalDate until) =>
+        part.Plot == DemoPlot.LeftOnLaptop && date == DemoCalendar.LatestBefore(until, 5, IsoDayOfWeek.Saturday);
+
     /// <summary>In words, for a terminal.</summary>
     public static IReadOnlyList<string> Lines { get; } =
     [
@@ -51,6 +61,10 @@ internal static class DeliveryPlan
         "Some rows of Petra Sarahiisi's come twice, from two devices: each counts once, the richer one stands.",
         "Kaisa Suvantoharju has sent a file twice, once under another name: it counts once.",
         "An upload of Joel Terhokari's broke off: that half is refused, the whole file beside it counts.",
-        "A file in a folder that names nobody is held; a settings file of Henri Loivarinne's is put aside.",
+        "Inka Lumisola and Sanni Kuuraniitty hand two pods to each other every Monday: serial number and date tell whose a recording is.",
+        "The clinic's set log comes whole every night, under the names that the gym knows: two of its lines are corrected and one is taken out.",
+        "The squad's form of ratings grows every night; one rating fits two recordings and one fits none: both are asked about.",
+        "A row of Saku Honkaluoto's lay on the club's laptop: held, until the table of answers said whose it is.",
+        "A file in another folder that names nobody stays held; a settings file of Henri Loivarinne's is put aside.",
     ];
 }

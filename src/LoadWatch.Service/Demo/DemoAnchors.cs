@@ -9,18 +9,32 @@ internal static class DemoAnchors
     private static readonly (string Exercise, double OfSquat)[] RowersLifts = [("squat", 1), ("deadlift", 1.15), ("row", 0.62), ("bench_press", 0.6)];
 
     private static readonly (string Exercise, double OfSquat)[] MembersLifts =
-        [("squat", 1), ("lunge", 0.4), ("leg_curl", 0.45), ("calf_raise", 0.9), ("bench_press", 0.4), ("row", 0.45), ("shoulder_press", 0.28)];
+    [
+        ("leg_press", 1.4), ("leg_curl", 0.45), ("leg_extension", 0.6), ("calf_raise", 1.1), ("chest_press", 0.42), ("seated_row", 0.48), ("shoulder_press", 0.28),
+    ];
+
+    /// <summary>The clinic tests two maxima, each on its machine, and only of those who come often.</summary>
+    private static readonly (string Exercise, string Machine)[] TestedOnMachines = [("leg_press", "press 1"), ("chest_press", "chest 1")];
 
     /// <param name="first">First date of the demo; tests were done a few days before.</param>
     public static IEnumerable<Anchor> Of(DemoPart part, DemoRandom random, LocalDate first) =>
-        HeartRates(part, random)
-            .Concat(part.Group == DemoCast.Class ? [] : Powers(part, random, first.PlusDays(-3)))
-            .Concat(part.Group switch
-            {
-                DemoCast.Boat => Lifts(part, RowersLifts, part.Sex == Sex.Male ? random.Between(105, 150) : random.Between(75, 110), first.PlusDays(-5)),
-                DemoCast.Class => Lifts(part, MembersLifts, part.Sex == Sex.Male ? random.Between(60, 95) : random.Between(40, 65), first.PlusDays(-5)),
-                _ => [],
-            });
+        HeartRates(part, random).Concat(part.Group == DemoCast.Class ? [] : Powers(part, random, first.PlusDays(-3)));
+
+    /// <summary>What the person can lift once, in half kilograms.</summary>
+    public static IReadOnlyDictionary<string, double> Maxima(DemoPart part, DemoRandom random) => part.Group switch
+    {
+        DemoCast.Boat => Lifts(RowersLifts, part.Sex == Sex.Male ? random.Between(105, 150) : random.Between(75, 110)),
+        DemoCast.Class => Lifts(MembersLifts, part.Sex == Sex.Male ? random.Between(60, 95) : random.Between(40, 65)),
+        _ => new Dictionary<string, double>(),
+    };
+
+    /// <summary>Those that somebody tested.</summary>
+    public static IEnumerable<Anchor> Tested(DemoPart part, IReadOnlyDictionary<string, double> maxima, LocalDate first) => part.Group switch
+    {
+        DemoCast.Boat => RowersLifts.Select(lift => Maximum(part, first, lift.Exercise, machine: null, maxima)),
+        DemoCast.Class when part.Week == WeekPlan.ThreeClasses => TestedOnMachines.Select(lift => Maximum(part, first, lift.Exercise, lift.Machine, maxima)),
+        _ => [],
+    };
 
     private static IEnumerable<Anchor> HeartRates(DemoPart part, DemoRandom random)
     {
@@ -37,7 +51,9 @@ internal static class DemoAnchors
         yield return new(part.Id, tested, AnchorKind.PowerMax, Math.Round(critical * random.Between(2.9, 3.2)), AnchorSource.Measured);
     }
 
-    private static IEnumerable<Anchor> Lifts(DemoPart part, (string Exercise, double OfSquat)[] lifts, double squat, LocalDate tested) =>
-        lifts.Select(lift => new Anchor(
-            part.Id, tested, AnchorKind.OneRepetitionMax, Math.Round(2 * squat * lift.OfSquat) / 2, AnchorSource.Measured, lift.Exercise));
+    private static Dictionary<string, double> Lifts((string Exercise, double OfSquat)[] lifts, double squat) =>
+        lifts.ToDictionary(lift => lift.Exercise, lift => Math.Round(2 * squat * lift.OfSquat) / 2, StringComparer.Ordinal);
+
+    private static Anchor Maximum(DemoPart part, LocalDate first, string exercise, string? machine, IReadOnlyDictionary<string, double> maxima) =>
+        new(part.Id, first.PlusDays(-5), AnchorKind.OneRepetitionMax, maxima[exercise], AnchorSource.Measured, exercise, Machine: machine);
 }

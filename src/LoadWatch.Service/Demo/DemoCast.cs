@@ -1,3 +1,4 @@
+using LoadWatch.Loads;
 using LoadWatch.People;
 
 namespace LoadWatch.Service.Demo;
@@ -12,6 +13,9 @@ public static class DemoCast
     public const string Boat = "boat";
     public const string Class = "class";
     public const string Masters = "masters";
+
+    /// <summary>The quantity that is a group's load.</summary>
+    public static string LoadOf(string group) => group == Class ? QuantityNames.Sets : QuantityNames.BanisterTrimp;
 
     public static IReadOnlyList<DemoPart> All { get; } =
     [
@@ -29,12 +33,12 @@ public static class DemoCast
         Rower("lotta", "Lotta Hiekkavirta", 22, Sex.Female, WeekPlan.FiveRows),
         Rower("matti", "Matti Jokiselkä", 24, Sex.Male, WeekPlan.FourRowsTwoGyms, DemoPlot.StrapFailed),
         Rower("milla", "Milla Usvalehto", 21, Sex.Female, WeekPlan.FiveRows),
-        Rower("niilo", "Niilo Karikallas", 30, Sex.Male, WeekPlan.ThreeDays),
+        Rower("niilo", "Niilo Karikallas", 30, Sex.Male, WeekPlan.ThreeDays, DemoPlot.Ill),
         Rower("oona", "Oona Pilvilahde", 19, Sex.Female, WeekPlan.FourRowsTwoGyms, DemoPlot.SilentNineDays),
         Rower("otso", "Otso Kelovaara", 25, Sex.Male, WeekPlan.FiveRows),
         Rower("petra", "Petra Sarahiisi", 28, Sex.Female, WeekPlan.FiveRows),
         Rower("ronja", "Ronja Aallotar-Mäki", 20, Sex.Female, WeekPlan.ThreeDays),
-        Rower("saku", "Saku Honkaluoto", 23, Sex.Male, WeekPlan.FourRowsTwoGyms),
+        Rower("saku", "Saku Honkaluoto", 23, Sex.Male, WeekPlan.FourRowsTwoGyms, DemoPlot.LeftOnLaptop),
         Rower("sanni", "Sanni Kuuraniitty", 24, Sex.Female, WeekPlan.FiveRows),
         Rower("tuomas", "Tuomas Myrskyriutta", 27, Sex.Male, WeekPlan.FourRowsTwoGyms),
         Rower("veera", "Veera Sinirouta", 18, Sex.Female, WeekPlan.ThreeDays),
@@ -47,7 +51,7 @@ public static class DemoCast
         Member("irja", "Irja Kellokanerva", 81, Sex.Female, WeekPlan.TwoClasses),
         Member("jorma", "Jorma Pihkapuro", 70, Sex.Male, WeekPlan.ThreeClasses, DemoPlot.ArmsForDays),
         Member("kerttu", "Kerttu Vanamovuori", 77, Sex.Female, WeekPlan.ThreeClasses, DemoPlot.SilentTwoWeeks),
-        Member("lempi", "Lempi Orvokkala", 83, Sex.Female, WeekPlan.TwoClasses),
+        Member("lempi", "Lempi Orvokkala", 83, Sex.Female, WeekPlan.TwoClasses, DemoPlot.WeakGrip),
         Member("martta", "Martta Pajuranko", 69, Sex.Female, WeekPlan.ThreeClasses),
         Member("onni", "Onni Saunakorpi", 75, Sex.Male, WeekPlan.ThreeClasses),
         Member("raija", "Raija Harmaalepikko", 66, Sex.Female, WeekPlan.TwoClasses),
@@ -55,7 +59,7 @@ public static class DemoCast
         Member("sirkka", "Sirkka Nurmilauha", 71, Sex.Female, WeekPlan.ThreeClasses),
         Member("toivo", "Toivo Kuusenjärvi", 78, Sex.Male, WeekPlan.ThreeClasses),
         Member("urho", "Urho Vasamäki", 67, Sex.Male, WeekPlan.TwoClasses),
-        Member("vieno", "Vieno Kultaruoho", 73, Sex.Female, WeekPlan.ThreeClasses),
+        Member("vieno", "Vieno Kultaruoho", 73, Sex.Female, WeekPlan.ThreeClasses, DemoPlot.AwayAsTold),
 
         new("henri", "Henri Loivarinne", Masters, 58, Sex.Male, WeekPlan.ThreeRides),
     ];

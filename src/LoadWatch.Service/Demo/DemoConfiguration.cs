@@ -6,7 +6,7 @@ using NodaTime.Text;
 
 namespace LoadWatch.Service.Demo;
 
-/// <summary>The three files beside the inbox: configuration, roster, reference values.</summary>
+/// <summary>The files beside the inbox: configuration, roster, reference values, devices that are handed out.</summary>
 internal static class DemoConfiguration
 {
     private const string Settings = """
@@ -18,13 +18,15 @@ internal static class DemoConfiguration
           "time_zone": "Europe/Helsinki",     // of everybody who names none
 
           "inboxes": [
-            // A sub-folder named after a person holds that person's recordings; "leave" keeps the files where they are.
+            // A sub-folder named after a person holds that person's recordings, other folders tables and recordings of pods that are
+            // handed out (devices.csv); "leave" keeps the files where they are.
             { "name": "inbox", "path": "inbox", "take": "leave" }
           ],
 
           "groups": [
             { "id": "boat", "name": "Rowing squad" },
-            { "id": "class", "name": "Strength class" },
+            // The clinic writes sets down and records no heart rate.
+            { "id": "class", "name": "Strength class", "load_quantity": "sets" },
             { "id": "masters", "name": "Masters" }
           ],
 
@@ -32,6 +34,7 @@ internal static class DemoConfiguration
           "contacts": [
             { "id": "coach", "name": "Sorja Hallakoski", "role": "coach", "groups": ["boat"], "people": [], "brief_at": "06:30" },
             { "id": "physio", "name": "Tyyne Varpusalo", "role": "physiotherapist", "groups": ["class"], "people": [], "brief_at": "07:15" },
+            { "id": "clinic", "name": "Aamu Lehtovirta", "role": "clinician", "groups": ["class"], "people": [], "brief_at": "07:00" },
             { "id": "henri", "name": "Henri Loivarinne", "role": "self", "groups": ["masters"], "people": ["henri"], "brief_at": "06:00" }
           ]
         }
@@ -42,25 +45,26 @@ internal static class DemoConfiguration
     {
         var written = DemoPerson.Zone.AtStartOfDay(until.PlusDays(-DemoTimeline.Days)).ToInstant();
         yield return new DemoFile("loadwatch.json", Encoding.UTF8.GetBytes(Settings.ReplaceLineEndings("\n")), written);
-        yield return new DemoFile("roster.csv", Table("person,name,group,birth_year,sex,time_zone", people.Select(Roster)), written);
+        yield return new DemoFile("roster.csv", DemoTable.Bytes("person,name,group,birth_year,sex,time_zone,aliases,heart_rate_valid", people.Select(Roster)), written);
         yield return new DemoFile(
-            "anchors.csv", Table("person,date,anchor,value,unit,source,exercise", people.SelectMany(person => person.Anchors).Select(Anchor)), written);
+            "anchors.csv", DemoTable.Bytes("person,date,anchor,value,unit,source,exercise,machine", people.SelectMany(person => person.Anchors).Select(Anchor)), written);
+        yield return new DemoFile("devices.csv", DemoTable.Bytes("serial,person,from,to,session", Devices(people, until)), written);
     }
 
-    private static byte[] Table(string header, IEnumerable<string> rows) =>
-        Encoding.UTF8.GetBytes(string.Join('\n', rows.Prepend(header)) + "\n");
+    private static IEnumerable<string> Devices(IReadOnlyList<DemoPerson> people, LocalDate until) =>
+        people.Any(person => DemoPods.Of(person.Part.Id, until) is not null) ? DemoPods.Assignments(until) : [];
 
     private static string Roster(DemoPerson demo)
     {
         var person = demo.Person;
         var sex = person.Sex == Sex.Female ? "f" : "m";
-        return string.Create(CultureInfo.InvariantCulture, $"{person.Id},{person.Name},{person.Group},{person.BirthYear},{sex},");
+        return string.Create(CultureInfo.InvariantCulture, $"{person.Id},{person.Name},{person.Group},{person.BirthYear},{sex},,{string.Join(';', person.Aliases)},{(person.HeartRateInvalidFrom is null ? "" : "no")}");
     }
 
     private static string Anchor(Anchor anchor)
     {
         var info = AnchorKinds.Of(anchor.Kind);
         var date = anchor.Date is { } known ? LocalDatePattern.Iso.Format(known) : "";
-        return string.Create(CultureInfo.InvariantCulture, $"{anchor.Person},{date},{info.Name},{anchor.Value},{info.Unit},measured,{anchor.Exercise}");
+        return string.Create(CultureInfo.InvariantCulture, $"{anchor.Person},{date},{info.Name},{anchor.Value},{info.Unit},measured,{anchor.Exercise},{anchor.Machine}");
     }
 }

@@ -9,7 +9,7 @@ public enum DemoPlot
     /// <summary>Two sessions a day in the last week.</summary>
     RampUp,
 
-    /// <summary>Rows easy for the last two weeks and more: nothing heavy, nothing fast.</summary>
+    /// <summary>Rows easy and leaves out the gym for the last two weeks and more: nothing heavy, nothing fast. The coach has seen it.</summary>
     EasyOnly,
 
     /// <summary>The strap gives 0 for the last three weeks; power is still there.</summary>
@@ -18,12 +18,24 @@ public enum DemoPlot
     /// <summary>Nothing came for nine days.</summary>
     SilentNineDays,
 
-    /// <summary>Nothing came for two weeks.</summary>
+    /// <summary>On holiday for two weeks, and nobody was told.</summary>
     SilentTwoWeeks,
 
-    /// <summary>No leg work for nearly four weeks.</summary>
+    /// <summary>Away for some days, as staff were told.</summary>
+    AwayAsTold,
+
+    /// <summary>Ill for a week, back since, with shorter sessions.</summary>
+    Ill,
+
+    /// <summary>One session lay on the club's laptop, until the coach said whose it is.</summary>
+    LeftOnLaptop,
+
+    /// <summary>Grip strength fell below the published cut-off.</summary>
+    WeakGrip,
+
+    /// <summary>No leg work for more than three weeks.</summary>
     ArmsForWeeks,
 
-    /// <summary>No leg work for nearly two weeks.</summary>
+    /// <summary>No leg work for about two weeks.</summary>
     ArmsForDays,
 }

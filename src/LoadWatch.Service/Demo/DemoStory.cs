@@ -10,31 +10,44 @@ public sealed record DemoAlert(string Person, string Rule, BodyRegion? Region, S
 /// <summary>The storyline: known before the first number is drawn.</summary>
 public static class DemoStory
 {
-    /// <summary>Every alert that stands on the last date under the shipped limits, by person; nobody else has one.</summary>
+    /// <summary>Every alert that stands on the last date under the shipped limits, by person and rule; nobody else has one.</summary>
     public static IReadOnlyList<DemoAlert> Alerts { get; } =
-        [.. DemoCast.All.Select(Alert).OfType<DemoAlert>().OrderBy(alert => alert.Person, StringComparer.Ordinal)];
+    [
+        .. DemoCast.All.SelectMany(Alert).OrderBy(alert => alert.Person, StringComparer.Ordinal).ThenBy(alert => alert.Rule, StringComparer.Ordinal),
+    ];
 
     /// <summary>The same in words, with what leaves no alert, for a terminal.</summary>
     public static IReadOnlyList<string> Lines { get; } = [.. DemoCast.All.Select(Line).OfType<string>()];
 
-    private static DemoAlert? Alert(DemoPart part) => part.Plot switch
+    private static IEnumerable<DemoAlert> Alert(DemoPart part) => part.Plot switch
     {
-        DemoPlot.RampUp => new(part.Id, "load_ratio", null, Severity.Warning),
-        DemoPlot.EasyOnly or DemoPlot.ArmsForWeeks => new(part.Id, "stimulus_gap", BodyRegion.Legs, Severity.Warning),
-        DemoPlot.ArmsForDays => new(part.Id, "stimulus_gap", BodyRegion.Legs, Severity.Notice),
-        DemoPlot.SilentNineDays or DemoPlot.SilentTwoWeeks => new(part.Id, "silence", null, Severity.Notice),
-        _ => null,
+        DemoPlot.RampUp =>
+        [
+            new(part.Id, "load_ratio", null, Severity.Warning),
+            new(part.Id, "weekly_jump", null, Severity.Notice),
+            new(part.Id, "hard_days", null, Severity.Notice),
+            new(part.Id, "monotony", null, Severity.Notice),
+        ],
+        DemoPlot.EasyOnly or DemoPlot.ArmsForWeeks => [new(part.Id, "stimulus_gap", BodyRegion.Legs, Severity.Warning)],
+        DemoPlot.ArmsForDays => [new(part.Id, "stimulus_gap", BodyRegion.Legs, Severity.Notice)],
+        DemoPlot.StrapFailed => [new(part.Id, "not_usable", null, Severity.Notice)],
+        DemoPlot.SilentNineDays or DemoPlot.SilentTwoWeeks => [new(part.Id, "silence", null, Severity.Notice)],
+        DemoPlot.WeakGrip => [new(part.Id, "function_test", null, Severity.Notice)],
+        _ => [],
     };
 
     private static string? Line(DemoPart part) => part.Plot switch
     {
-        DemoPlot.RampUp => $"{part.Name} rows twice a day in the last week: more than twice the usual week.",
-        DemoPlot.EasyOnly => $"{part.Name} has only rowed easily for more than two weeks: no heavy or fast work of the legs.",
+        DemoPlot.RampUp => $"{part.Name} rows twice a day in the last week: more than twice the usual week, and every day as hard as the next.",
+        DemoPlot.EasyOnly => $"{part.Name} has rowed easily and left out the gym for more than two weeks: no heavy or fast work of the legs. The coach has seen it.",
         DemoPlot.ArmsForWeeks => $"{part.Name} has trained arms only for more than three weeks: no heavy leg work.",
-        DemoPlot.ArmsForDays => $"{part.Name} has trained arms only for nearly two weeks.",
-        DemoPlot.StrapFailed => $"{part.Name}'s strap gives no heart rate for three weeks: no load rather than a wrong one, and no alert.",
-        DemoPlot.SilentNineDays => $"{part.Name} sends nothing for nine days, against nearly every day before.",
-        DemoPlot.SilentTwoWeeks => $"{part.Name} sends nothing for two weeks, against three times a week before.",
+        DemoPlot.ArmsForDays => $"{part.Name} has trained arms only for about two weeks: no heavy leg work, told as a notice.",
+        DemoPlot.StrapFailed => $"{part.Name}'s strap gives no heart rate for three weeks: no load rather than a wrong one, and a word about the strap.",
+        DemoPlot.SilentNineDays => $"{part.Name} sends nothing for nine days: two and more of the squad's planned rows without a recording.",
+        DemoPlot.SilentTwoWeeks => $"{part.Name} is on holiday, and nobody was told: four classes of the plan missed.",
+        DemoPlot.AwayAsTold => $"{part.Name} is away too, as staff were told: no alert.",
+        DemoPlot.Ill => $"{part.Name} was ill for a week and is back with shorter sessions; the coach's page counts the days since the return and says nothing of the illness.",
+        DemoPlot.WeakGrip => $"{part.Name}'s grip strength fell below the published cut-off: told to the clinician alone.",
         _ => null,
     };
 }

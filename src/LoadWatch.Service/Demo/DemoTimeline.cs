@@ -2,11 +2,23 @@ using NodaTime;
 
 namespace LoadWatch.Service.Demo;
 
-/// <summary>Which sessions a part holds, date by date. Dates of the plots count back from the last date, weekdays are those of the calendar.</summary>
+/// <summary>
+/// Which sessions a part holds, date by date. Dates of the plots count back from the last date, weekdays are those of the calendar. Heavy leg work ends with
+/// the last of a usual week's days of it, so that it is told as one gap and not as few days before that.
+/// </summary>
 internal static class DemoTimeline
 {
     /// <summary>Length of the demo, days.</summary>
     public const int Days = 84;
+
+    /// <summary>First date of the illness, days back.</summary>
+    public const int IllFrom = 12;
+
+    /// <summary>The day of the return, days back.</summary>
+    public const int IllUntil = 5;
+
+    /// <summary>First date of the absence that was told, days back.</summary>
+    public const int AwayFrom = 10;
 
     /// <summary>Nobody misses a session so near the end, days back.</summary>
     private const int UnbrokenDays = 42;
@@ -19,22 +31,30 @@ internal static class DemoTimeline
         for (var back = Days; back >= 1; back--)
         {
             var date = until.PlusDays(-back);
-            foreach (var slot in Slots(part, date, back).Where(slot => !IsMissed(part, seed, date + slot.At, back)))
+            foreach (var slot in Slots(part, date, back, until).Where(slot => !IsMissed(part, seed, date + slot.At, back)))
                 yield return new PlannedSession(date, slot, HeartRateSeen: part.Plot != DemoPlot.StrapFailed || back > 21);
         }
     }
 
-    private static IEnumerable<WeekSlot> Slots(DemoPart part, LocalDate date, int back)
+    private static IEnumerable<WeekSlot> Slots(DemoPart part, LocalDate date, int back, LocalDate until)
     {
+        if (part.Group == DemoCast.Boat && date == DemoCalendar.DayOff(until))
+            return [];
+
         var usual = part.Week.On(date.DayOfWeek);
         return part.Plot switch
         {
             DemoPlot.RampUp when back <= 7 => WeekPlan.TwoRowsADay.Where(slot => slot.Day == date.DayOfWeek),
-            DemoPlot.EasyOnly when back <= 16 => usual.Select(slot => slot with { Kind = SessionKind.Row }),
+            DemoPlot.EasyOnly when date > DemoCalendar.LatestBefore(until, 17, IsoDayOfWeek.Tuesday) =>
+                usual.Where(slot => slot.Kind != SessionKind.Gym).Select(slot => slot with { Kind = SessionKind.Row }),
+            DemoPlot.Ill when back is <= IllFrom and > IllUntil => [],
+            DemoPlot.Ill when back <= IllUntil => usual.Select(slot => slot with { Minutes = slot.Minutes * 2 / 3 }),
+            DemoPlot.AwayAsTold when back <= AwayFrom => [],
             DemoPlot.SilentNineDays when back <= 9 => [],
             DemoPlot.SilentTwoWeeks when back <= 14 => [],
-            DemoPlot.ArmsForWeeks when back <= 24 => usual.Select(slot => slot with { Kind = SessionKind.ClassArms }),
-            DemoPlot.ArmsForDays when back <= 12 => usual.Select(slot => slot with { Kind = SessionKind.ClassArms }),
+            DemoPlot.ArmsForWeeks when date > DemoCalendar.LatestBefore(until, 25, IsoDayOfWeek.Saturday) => usual.Select(slot => slot with { Kind = SessionKind.ClassArms }),
+            DemoPlot.ArmsForDays when date > DemoCalendar.LatestBefore(until, 13, IsoDayOfWeek.Saturday) => usual.Select(slot => slot with { Kind = SessionKind.ClassArms }),
+            _ when part.Group == DemoCast.Boat && DemoCalendar.IsInCamp(date, until) => usual.Select(slot => slot with { Minutes = slot.Minutes * 6 / 5 }),
             _ => usual,
         };
     }

@@ -13,18 +13,13 @@ internal static class StrengthSession
 
     private static readonly Lift[] RowersLifts = [new("squat", 3, 6), new("deadlift", 3, 5), new("row", 3, 8), new("bench_press", 3, 8)];
 
-    private static readonly Lift[] LegLifts = [new("squat", 3, 8), new("lunge", 2, 8), new("leg_curl", 2, 8), new("calf_raise", 2, 10)];
-
-    private static readonly Lift[] ArmLifts = [new("bench_press", 3, 8), new("row", 3, 8), new("shoulder_press", 2, 8)];
-
     /// <summary>The sets in time order, rests as sets that are not active.</summary>
-    public static IReadOnlyList<StrengthSet> Sets(DemoPerson person, SessionKind kind, Instant start, double minutes, DemoRandom random)
+    public static IReadOnlyList<StrengthSet> Sets(DemoPerson person, Instant start, double minutes, DemoRandom random)
     {
-        var lifts = Lifts(kind);
-        var turn = minutes * 60 / lifts.Sum(lift => lift.Sets);
+        var turn = minutes * 60 / RowersLifts.Sum(lift => lift.Sets);
         List<StrengthSet> sets = [];
         var at = start;
-        foreach (var lift in lifts)
+        foreach (var lift in RowersLifts)
         {
             var kilograms = Kilograms(person, lift, random);
             for (var set = 0; set < lift.Sets; set++)
@@ -55,13 +50,6 @@ internal static class StrengthSession
 
         return samples;
     }
-
-    private static Lift[] Lifts(SessionKind kind) => kind switch
-    {
-        SessionKind.Gym => RowersLifts,
-        SessionKind.ClassArms => [.. ArmLifts, .. ArmLifts],
-        _ => [.. LegLifts, .. ArmLifts],
-    };
 
     /// <summary>
     /// Between three quarters and a little above four fifths of the maximum, in the steps of the plates: hard from the first repetition, also where

@@ -51,22 +51,22 @@ public sealed record WeekPlan(double LengthDeviation, IReadOnlyList<WeekSlot> Sl
     public static WeekPlan ThreeDays { get; } = new(0.06,
     [
         new(Monday, Morning, SessionKind.Row, 45),
+        new(Monday, Afternoon, SessionKind.Gym, 40),
         new(Wednesday, Morning, SessionKind.RowIntervals, 30),
-        new(Friday, Morning, SessionKind.Row, 45),
-        new(Friday, Afternoon, SessionKind.Gym, 40),
+        new(Saturday, Forenoon, SessionKind.Row, 45),
     ]);
 
     public static WeekPlan ThreeClasses { get; } = new(0.05,
     [
-        new(Monday, Forenoon, SessionKind.ClassAll, 45),
-        new(Wednesday, Forenoon, SessionKind.ClassAll, 45),
-        new(Friday, Forenoon, SessionKind.ClassAll, 45),
+        new(Tuesday, Forenoon, SessionKind.ClassAll, 45),
+        new(Thursday, Forenoon, SessionKind.ClassAll, 45),
+        new(Saturday, Forenoon, SessionKind.ClassAll, 45),
     ]);
 
     public static WeekPlan TwoClasses { get; } = new(0.05,
     [
         new(Tuesday, Forenoon, SessionKind.ClassAll, 50),
-        new(Friday, Forenoon, SessionKind.ClassAll, 50),
+        new(Thursday, Forenoon, SessionKind.ClassAll, 50),
     ]);
 
     public static WeekPlan ThreeRides { get; } = new(0.08,
@@ -76,7 +76,7 @@ public sealed record WeekPlan(double LengthDeviation, IReadOnlyList<WeekSlot> Sl
         new(Sunday, Forenoon, SessionKind.Ride, 60),
     ]);
 
-    /// <summary>The sessions of a week of two rows a day.</summary>
+    /// <summary>The sessions of a week of two rows a day, every day as hard as the next.</summary>
     public static IReadOnlyList<WeekSlot> TwoRowsADay { get; } =
         [.. Enum.GetValues<IsoDayOfWeek>().Where(day => day != None).SelectMany(RowsOf)];
 
@@ -84,7 +84,7 @@ public sealed record WeekPlan(double LengthDeviation, IReadOnlyList<WeekSlot> Sl
 
     private static IEnumerable<WeekSlot> RowsOf(IsoDayOfWeek day)
     {
-        yield return new(day, Morning, day == Tuesday ? SessionKind.RowIntervals : SessionKind.Row, 38);
-        yield return new(day, Afternoon, SessionKind.Row, 33);
+        yield return new(day, Morning, day == Tuesday ? SessionKind.RowIntervals : SessionKind.Row, 43);
+        yield return new(day, Afternoon, SessionKind.Row, day == Tuesday ? 55 : 38);
     }
 }

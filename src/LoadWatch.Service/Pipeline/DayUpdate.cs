@@ -1,8 +1,6 @@
 using LoadWatch.Activities;
 using LoadWatch.Days;
 using LoadWatch.Findings;
-using LoadWatch.Loads;
-using LoadWatch.Notices;
 using LoadWatch.People;
 using LoadWatch.Plans;
 using LoadWatch.Rows;
@@ -77,47 +75,15 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
         var (training, tests) = store.Read(session => (
             PersonTraining.Of(session, configuration, basis, person),
             session.TableRows.OfPerson(person.Id, RowKind.Tests).Select(row => new DatedTest(row.Date, (TestRow)row.Content)).ToList()));
-        var activities = training.Activities.Where(activity => activity.Date <= through).ToList();
-        var plan = plans[person.Id];
-        var counted = Counted(person, group.LoadQuantity, group.LoadFallbacks, activities);
-        var days = LoadCalendar.Build(person.Id, counted, through, plan);
-        var findings = RuleBook.Evaluate(new RuleSubject(person, days, group.Limits)
-        {
-            LoadUnit = LoadUnits.Of(group.LoadQuantity),
-            LoadQuantity = group.LoadQuantity,
-            SessionLoads = counted.ToDictionary(activity => activity.Key, activity => activity.Load, StringComparer.Ordinal),
-            Activities = activities,
-            Plan = plan,
-            Tests = tests.FindAll(test => test.Date <= through),
-            Series = group.Limits.Quantities.ToDictionary(
-                name => name,
-                name => new QuantitySeries(name, LoadUnits.Of(name), LoadCalendar.Build(person.Id, Counted(person, name, [], activities), through, plan)),
-                StringComparer.Ordinal),
-        });
+        var series = PersonSeries.Of(person, group, training.Activities, tests, plans[person.Id], through);
         return new ComputedSeries(
             person.Id,
             from,
             through,
             marks.GetValueOrDefault(person.Id),
-            days.Where(day => day.Date >= from).ToList(),
-            findings.Where(finding => finding.Date >= from).ToList(),
+            series.Days.Where(day => day.Date >= from).ToList(),
+            series.Findings.Where(finding => finding.Date >= from).ToList(),
             Questions(person, training).Where(question => question.Date >= through.PlusDays(-QuestionDays)).ToList());
-    }
-
-    /// <summary>Each session with the load that counts for its day.</summary>
-    private static List<ActivityOnDay> Counted(Person person, string quantity, IReadOnlyList<string> fallbacks, List<JoinedActivity> activities)
-    {
-        var order = new LoadOrder(quantity, fallbacks, activities.ConvertAll(Loads), person.HeartRateIsValidOn);
-        return activities.ConvertAll(activity => OnDay(activity, order, quantity));
-    }
-
-    private static SessionLoads Loads(JoinedActivity activity) => new(activity.Date, activity.Quantities);
-
-    /// <summary>What a session of its sport cannot hold is none: a ride lifts no kilograms.</summary>
-    private static ActivityOnDay OnDay(JoinedActivity activity, LoadOrder order, string quantity)
-    {
-        var load = order.Choose(Loads(activity))?.Value ?? (QuantitySports.MayHold(quantity, activity.Sport) ? null : 0);
-        return new ActivityOnDay(activity.Key, activity.Date, activity.Sources, load, activity.Stimulus, activity.AddsLoad);
     }
 
     /// <summary>An exercise of a set log that has no body region is asked about with the date of the last session.</summary>

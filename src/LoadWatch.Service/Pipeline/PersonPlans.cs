@@ -43,13 +43,18 @@ public sealed class PersonPlans(WorkingConfiguration configuration)
         ? [""]
         : (configuration.Subjects.Of(row) ?? []).Select(person => person.Id);
 
-    internal static PlanEntry Entry(StoredRow row)
+    /// <summary>The line of the plan that a row of kind plan is.</summary>
+    public static PlanEntry Entry(StoredRow row)
     {
         var plan = (PlanRow)row.Content;
         return new PlanEntry(plan.Word, row.Date, LastDate(row.Date, plan.Until), plan.Start, plan.End, plan.RecordingExpected, plan.Sport);
     }
 
-    private static PersonPlan Plan(IReadOnlyList<PlanEntry> entries, IReadOnlyList<StoredRow> days, IReadOnlyList<Decision> decisions)
+    /// <summary>One person's plan. Pure.</summary>
+    /// <param name="entries">Lines about the person, the group or everybody.</param>
+    /// <param name="days">Rows of kind days of the person.</param>
+    /// <param name="decisions">In force, of the person, in the order of their moments.</param>
+    public static PersonPlan Plan(IReadOnlyList<PlanEntry> entries, IReadOnlyList<StoredRow> days, IReadOnlyList<Decision> decisions)
     {
         var said = days.Select(row => (row.Date, ((DayWordRow)row.Content).Word)).ToList();
         var decided = Absences.Decided(decisions);

@@ -51,8 +51,8 @@ public sealed class DemoFolderTests : IDisposable
     [Fact]
     public void AFileHoldsWhatTheRulesWereJudgedOn()
     {
-        var person = DemoPerson.Draw(DemoCast.All.Single(part => part.Id == "elvi"), 7, Until);
-        var activity = DemoSessions.Of(person, 7, Until).First();
+        var person = DemoPerson.Draw(DemoCast.All.Single(part => part.Id == "kaisa"), 7, Until);
+        var activity = DemoSessions.Of(person, 7, Until).First(session => session.Sets.Count > 0);
         var (told, read) = (DemoRecording.Of(activity), Assert.Single(FitDecoder.Decode(FitEncoder.Encode(activity)).Recordings));
         Assert.Equal((told.Sport, told.Start, told.LocalOffset, told.Device), (read.Sport, read.Start, read.LocalOffset, read.Device));
         Assert.Equal(told.Sets, read.Sets);
@@ -72,6 +72,9 @@ public sealed class DemoFolderTests : IDisposable
         Assert.Single(files, file => file.StartsWith("inbox/kaisa/copy of ", StringComparison.Ordinal));
         Assert.Single(files, file => file.StartsWith("inbox/joel/half of ", StringComparison.Ordinal));
         Assert.Single(files, file => file.StartsWith("inbox/_unknown-upload/", StringComparison.Ordinal));
+        Assert.Single(files, file => file.StartsWith("inbox/_club-laptop/", StringComparison.Ordinal));
+        Assert.Equal(2, files.Where(file => file.StartsWith("inbox/pods/", StringComparison.Ordinal)).Select(file => file.Split('-')[^1]).Distinct().Count());
+        Assert.DoesNotContain(files, file => file.StartsWith("inbox/inka/", StringComparison.Ordinal) || file.StartsWith("inbox/sanni/", StringComparison.Ordinal));
         Assert.Contains("inbox/henri/settings.fit", files);
     }
 
@@ -81,6 +84,22 @@ public sealed class DemoFolderTests : IDisposable
         Written("a", 7, Until);
         var morning = (Until + new LocalTime(6, 0)).InZoneLeniently(DemoPerson.Zone).ToInstant().ToDateTimeUtc();
         Assert.All(Directory.EnumerateFiles(root.FullName, "*", SearchOption.AllDirectories), path => Assert.True(File.GetLastWriteTimeUtc(path) < morning, path));
+    }
+
+    [Fact]
+    public void TheSetLogGrowsNightByNightAndIsCorrected()
+    {
+        var demo = new DemoFolder(Path.Combine(root.FullName, "a"), 7, Until, [.. DemoCast.All.Where(part => part.Group == DemoCast.Class)]);
+        List<string[]> versions = [];
+        foreach (var morning in demo.Mornings)
+        {
+            demo.Arrive(morning);
+            versions.Add(morning == demo.Mornings[0] ? [] : File.ReadAllLines(Path.Combine(root.FullName, "a", "inbox", "class", "sets.csv")));
+        }
+
+        Assert.Equal([1, 2, 0], versions.Skip(1).Zip(versions.Skip(2), (before, after) => before.Except(after).Count()));
+        Assert.All(versions[^1].Skip(1), line => Assert.Matches("^[^,]+,[0-9-]{10},[0-9:]{5},[a-z_]+,", line));
+        Assert.True(versions[^1].Length > versions[1].Length);
     }
 
     [Fact]
