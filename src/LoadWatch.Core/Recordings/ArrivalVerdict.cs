@@ -73,7 +73,7 @@ public sealed record ArrivalVerdict(ArrivalState State, string? Reason, string? 
     {
         var error = file.Problems.FirstOrDefault(problem => problem.Severity == ProblemSeverity.Error);
         return error is not null
-            ? new ArrivalVerdict(ArrivalState.Refused, error.ToString(), null)
+            ? new ArrivalVerdict(ArrivalState.Refused, file is { Kind: "table", Problems: [_, var row, ..] } ? $"{error}; the first: {row}" : error.ToString(), null)
             : new ArrivalVerdict(ArrivalState.Aside, $"no training in it: {file.FileType ?? file.Kind}", null);
     }
 }

@@ -13,9 +13,6 @@ internal sealed class RowProblems
     /// <summary>Lines that cannot be used; a row over several lines counts with all of them.</summary>
     public long BadLines { get; private set; }
 
-    /// <summary>The first; null without any.</summary>
-    public Problem? First => problems.Count > 0 ? problems[0] : null;
-
     public void AddBad(Problem problem, int lines)
     {
         BadLines += lines;

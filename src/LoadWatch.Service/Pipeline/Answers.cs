@@ -61,7 +61,8 @@ public sealed class Answers(WorkingConfiguration configuration, Instant now)
     private static bool IsThere(StoreSession session, string via) => Enumerable.Range(0, via.Length)
         .Where(at => via[at] == '|')
         .Select(at => via[..at])
-        .Any(table => Decision.ScopeOf(table) is { } scope && session.TableVersions.Applied().Any(version => version.Scope == scope));
+        .Any(table => Decision.ScopeOf(table) is { } scope
+            && (session.TableRows.OfScope(scope).Any(row => row.Kind == RowKind.Answers) || session.TableVersions.Applied().Any(version => version.Scope == scope)));
 
     /// <summary>A row that went and came back within one moment decides a nanosecond later.</summary>
     private static Decision WithFreeId(Decision decision, HashSet<string> taken)

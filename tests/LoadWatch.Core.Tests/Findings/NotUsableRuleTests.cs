@@ -14,7 +14,7 @@ public class NotUsableRuleTests
         var findings = Evaluate((2, Channel.HeartRate, 0.3), (7, Channel.HeartRate, 0.49));
 
         Assert.Equal([On(7), On(8)], findings.Select(finding => finding.Date));
-        Assert.Equal("Too little usable heart rate in 2 sessions of the last 7 days, last on 12 January: no load from them.", findings[0].Text);
+        Assert.Equal("Too little usable heart rate in 2 sessions of the last 7 days, last on 12 January: nothing was read from it.", findings[0].Text);
     }
 
     [Fact]

@@ -95,7 +95,7 @@ public class SilenceRuleTests
         var evidence = Rule.Of(Recorded(90, MondaysWednesdaysFridays))[^1].Evidence;
         var values = evidence.Inputs.ToDictionary(item => item.Name, item => item.Value, StringComparer.Ordinal);
 
-        Assert.Equal((9, 3, 35, 5, 2), (values["days_since_recorded"], values["usual_gap"], values["gaps"], values["limit"], values["extra"]));
+        Assert.Equal((9, 3, 35, 5, 2), (values["silent_days"], values["usual_gap"], values["gaps"], values["limit"], values["extra"]));
     }
 
     private static IReadOnlyList<Day> Recorded(int through, params int[] days) => Build(through, [.. days.Select(day => Activity(day))]);

@@ -310,7 +310,8 @@ public sealed class BriefBuilderTests
     [InlineData("load_ratio", "Load well above the usual: not watched while away or returning.")]
     [InlineData("weekly_jump", "Load of a week far above the last: not watched while away or returning.")]
     [InlineData("falling_load", "Load well below the usual: not watched while away or returning.")]
-    [InlineData("stimulus_gap", "Heavy or fast work is back.")]
+    [InlineData("stimulus_gap", "No heavy or fast work lately: not watched while away or returning.")]
+    [InlineData("not_usable", "Recordings can be used again.")]
     public void ARuleThatIsOffHasNotSeenTheEnd(string rule, string expected)
     {
         var over = Over(News("a", rule, null, Severity.Notice, AlertState.Unacknowledged, "as it was", false));

@@ -17,7 +17,7 @@ internal static class AnswerRows
     public static AnswerRow Say(AnswerWord word, LocalDate? until = null, string? rule = null, string? file = null, string? by = null, string? note = null) =>
         new(word, until, rule, file, by, note);
 
-    /// <summary>Puts these in place of all rows of the table, and beside them one that asks for nothing: no version of a table is empty.</summary>
+    /// <summary>Puts these in place of all rows of the table, and beside them one that asks for nothing: the table is there.</summary>
     public static void PutRows(this WorkingFolder folder, params StoredRow[] rows) => folder.Write((_, session) =>
     {
         session.TableRows.Remove(session.TableRows.OfScope(Scope));

@@ -195,9 +195,9 @@ internal sealed class TableReading
         return bad switch
         {
             0 => null,
-            _ when keyed.Count == 0 => new Problem(ProblemSeverity.Error, $"none of {all} rows can be used; the first: {problems.First}"),
+            _ when keyed.Count == 0 => new Problem(ProblemSeverity.Error, $"none of {all} rows can be used"),
             > BadRowsAllowed when bad * 100 > all * BadPercentAllowed =>
-                new Problem(ProblemSeverity.Error, $"{bad} of {all} rows cannot be used, more than {BadPercentAllowed} %; the first: {problems.First}"),
+                new Problem(ProblemSeverity.Error, $"{bad} of {all} rows cannot be used, more than {BadPercentAllowed} %"),
             _ => null,
         };
     }
