@@ -15,6 +15,9 @@ internal static class BriefRows
     private const int WeekDays = 7;
     private const int RemarksShown = 2;
 
+    /// <summary>The last days before a recording comes in are ordinary.</summary>
+    private const int TailDays = 5;
+
     /// <param name="view">What the reader may be told of somebody's health.</param>
     /// <param name="upTo">The last date of the brief; dates without a day are unknown.</param>
     public static BriefRow Of(BriefSubject subject, LocalDate upTo, RoleView view, bool self)
@@ -127,7 +130,7 @@ internal static class BriefRows
         {
             yield return $"no heavy or fast leg work seen in {days + 1} days on record";
         }
-        else if (today?.Regions.GetValueOrDefault(BodyRegion.Legs) is { DaysSince: > 0 and { } since } legs
+        else if (today?.Regions.GetValueOrDefault(BodyRegion.Legs) is { DaysSince: >= TailDays and { } since } legs
             && !subject.Group.Limits.StimulusGap.KnownEnough(legs.KnownDaysSince, since))
         {
             yield return $"leg work known on {legs.KnownDaysSince} of the {since} days since the last heavy or fast one";

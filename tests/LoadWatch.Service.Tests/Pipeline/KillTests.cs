@@ -43,6 +43,23 @@ public sealed partial class KillTests : IDisposable
     }
 
     [Theory]
+    [InlineData("archived")]
+    [InlineData("waiting")]
+    [InlineData("decoded")]
+    public void AKnownFileUnderANewNameIsJudgedAnewAfterAKill(string point)
+    {
+        leaving.Put("lost.csv", "time,heart_rate_bpm\n2026-06-13T10:00:00Z,120\n2026-06-13T10:00:05Z,121\n"u8.ToArray());
+        leaving.Sweep();
+        leaving.Put("anna/lost.csv", "time,heart_rate_bpm\n2026-06-13T10:00:00Z,120\n2026-06-13T10:00:05Z,121\n"u8.ToArray());
+        Assert.Contains("\"state\":\"held\"", leaving.Export("arrivals"), StringComparison.Ordinal);
+
+        Assert.NotEqual(0, Loadwatch.RunAndKillAt(point, Sweep(leaving)).Code);
+        AssertDone(Loadwatch.Run(Sweep(leaving)));
+
+        Assert.Contains("\"state\":\"stored\",\"reason\":null,\"person\":\"anna\"", leaving.Export("arrivals"), StringComparison.Ordinal);
+    }
+
+    [Theory]
     [InlineData("waiting")]
     [InlineData("settled")]
     public void AKillBeforeTheInboxIsEmptiedLeavesTheRestToTheNextSweep(string point)

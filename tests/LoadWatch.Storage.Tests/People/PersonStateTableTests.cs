@@ -32,5 +32,17 @@ public sealed class PersonStateTableTests(SharedFolder shared) : StoreTest(share
         Assert.Equal(Some.Date.PlusDays(9), Store.Read(session => session.People.ComputedTo("anna")));
     }
 
+    [Fact]
+    public void WhoIsMarkedWhileTheDaysAreComputedStaysDirty()
+    {
+        Mark("anna", 5);
+        var marks = Store.Read(session => session.People.Marks());
+        Mark("anna", 7);
+
+        Store.Write(session => session.People.Computed("anna", Some.Date.PlusDays(9), marks["anna"]));
+
+        Assert.Equal([new DirtyPerson("anna", Some.Date.PlusDays(5))], Store.Read(session => session.People.Dirty()));
+    }
+
     private void Mark(string person, int offset) => Store.Write(session => session.People.MarkDirty(person, Some.Date.PlusDays(offset)));
 }
