@@ -31,6 +31,22 @@ public class FallingCapacityRuleTests
     }
 
     [Fact]
+    public void ASensorThatWritesNoughtShowsNothing()
+    {
+        Assert.Empty(Evaluate("speed_top", _ => 0));
+        Assert.Empty(Evaluate("power_top", day => day < 56 ? 0 : 700));
+    }
+
+    [Fact]
+    public void TimeWithoutRecordingsNeitherRaisesNorEndsIt()
+    {
+        var standing = Evaluate("speed_top", day => day < 56 ? 8 : 7, length: 150, until: 112);
+
+        Assert.Equal((On(105), On(149)), (standing[0].Date, standing[^1].Date));
+        Assert.Empty(Evaluate("speed_top", day => day == 60 ? 8.6 : 7.8, length: 150, until: 104));
+    }
+
+    [Fact]
     public void TooFewSessionsSayNothing() => Assert.Empty(Evaluate("speed_top", day => day < 56 ? 8 : 6, every: 20));
 
     [Fact]
@@ -45,10 +61,10 @@ public class FallingCapacityRuleTests
     public void InTheOffSeasonItIsOff() => Assert.Empty(
         Evaluate("speed_top", day => day < 56 ? 8 : 6, plan: DayPlan.None with { Phases = [PlanWord.OffSeason] }));
 
-    private static List<Finding> Evaluate(string quantity, Func<int, double> value, int every = 7, DayPlan? plan = null, int length = 112)
+    private static List<Finding> Evaluate(string quantity, Func<int, double> value, int every = 7, DayPlan? plan = null, int length = 112, int? until = null)
     {
         var unit = quantity switch { "speed_top" => "m/s", "power_top" => "W", "distance" => "m", _ => "kg" };
-        var activities = Enumerable.Range(0, length).Where(day => day % every == 0).Select(day => new JoinedActivity
+        var activities = Enumerable.Range(0, until ?? length).Where(day => day % every == 0).Select(day => new JoinedActivity
         {
             Key = $"a{day}",
             Date = On(day),
@@ -56,7 +72,7 @@ public class FallingCapacityRuleTests
             Sources = ["watch"],
             Quantities = [new Quantity(quantity, value(day), unit, false)],
         }).ToList();
-        var days = Enumerable.Range(0, length).Select(day => new Day { Person = "anna", Date = On(day), State = DayState.Recorded, Plan = plan ?? DayPlan.None }).ToList();
+        var days = Enumerable.Range(0, length).Select(day => new Day { Person = "anna", Date = On(day), State = day < (until ?? length) ? DayState.Recorded : DayState.Unknown, Plan = plan ?? DayPlan.None }).ToList();
         return new FallingCapacityRule().Evaluate(new RuleSubject(Anna, days, new RuleLimits()) { Activities = activities }).ToList();
     }
 }

@@ -36,6 +36,28 @@ public class PlannedSilenceTests
     }
 
     [Fact]
+    public void DaysOfAbsenceAndOfStatedRestAreNoSilence()
+    {
+        var days = Enumerable.Range(0, 40).Select(day => Of(day, recorded: day < 20, expected: false)).ToList();
+        var told = Rule.Of(days).Count;
+        var away = days.Select(day => day.Date >= On(20) ? day with { Plan = DayPlan.None with { Absence = AbsenceWord.Away } } : day).ToList();
+        var resting = days.Select(day => day.Date >= On(20) ? day with { Plan = DayPlan.None with { RestStatedBy = "plan" } } : day).ToList();
+
+        Assert.True(told > 0);
+        Assert.Empty(Rule.Of([.. away.Take(38), days[38], days[39]]));
+        Assert.Empty(Rule.Of([.. resting.Take(38), days[38], days[39]]));
+    }
+
+    [Fact]
+    public void WhoWasThereAndLoggedNothingIsSaidToHaveBeenThere()
+    {
+        var plan = new PersonPlan { Entries = [], Attendance = new Dictionary<NodaTime.LocalDate, bool> { [On(16)] = true, [On(18)] = false } };
+        var subject = new RuleSubject(Anna, Weeks(3, recorded: day => day < 14), Watched.Defaults) { Plan = plan };
+
+        Assert.EndsWith(" Last there on 21 January, by the list of attendance.", Rule.Evaluate(subject).First().Text, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void WhereAPlanExpectsRecordingsTheOwnRhythmIsNotAsked() =>
         Assert.Empty(Rule.Of(Enumerable.Range(0, 40).Select(day => Of(day, recorded: day < 20, expected: day is 5 or 21)).ToList()));
 

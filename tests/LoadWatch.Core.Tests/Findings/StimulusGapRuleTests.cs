@@ -110,4 +110,18 @@ public class StimulusGapRuleTests
         Assert.Equal((15, 15, 3, 60), (values["days_since"], values["known_days_since"], values["usual_gap"], values["age"]));
         Assert.Equal((10, 21, 0.7), (values["notice"], values["warning"], values["known_share_wanted"]));
     }
+
+    [Theory]
+    [InlineData(true)]
+    [InlineData(false)]
+    public void InAbsenceAndInTheFirstDaysBackNobodyIsSentToHeavyWork(bool away)
+    {
+        var plan = away
+            ? LoadWatch.Plans.DayPlan.None with { Absence = LoadWatch.Plans.AbsenceWord.Injured }
+            : LoadWatch.Plans.DayPlan.None with { ReturnDay = 3 };
+        var days = GapOf(20);
+
+        Assert.NotEmpty(Rule.Of(days));
+        Assert.Empty(Rule.Of([.. days.Select(day => day with { Plan = plan })]));
+    }
 }

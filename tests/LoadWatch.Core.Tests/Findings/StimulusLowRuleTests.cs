@@ -25,7 +25,7 @@ public class StimulusLowRuleTests
 
         var findings = Rule.Of(days, birthYear: 1950);
         Assert.Equal((On(80), 2, 3), (findings[0].Date, findings[0].Value, findings[0].Limit));
-        Assert.Equal("Heavy or fast leg work on 2 days of 14; usually 4, at least 3 expected. So since 26 March.", findings[0].Text);
+        Assert.Equal("Heavy or fast leg work on 2 days of 14; usually 4, the limit is 3. So since 26 March.", findings[0].Text);
         Assert.Equal(BodyRegion.Legs, findings[0].Region);
     }
 

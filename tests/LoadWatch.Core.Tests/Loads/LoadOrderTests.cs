@@ -36,6 +36,26 @@ public class LoadOrderTests
     }
 
     [Fact]
+    public void WhoNeverHadALoadOfHeartRateHasASeriesOfRatings()
+    {
+        var ratings = February.Select(session => session with { Quantities = [.. session.Quantities.Where(quantity => quantity.Name == "foster_load")] }).ToArray();
+
+        Assert.Equal(
+            new ChosenLoad(40, Estimated: true, "foster_load", Line: null),
+            new LoadOrder("banister_trimp", [], ratings, _ => false).Choose(ratings[0]));
+        Assert.Null(new LoadOrder("kilograms", [], ratings, _ => false).Choose(ratings[0]));
+        Assert.Null(new LoadOrder("banister_trimp", [], ratings, _ => true).Choose(ratings[0]));
+    }
+
+    [Fact]
+    public void TheLastLineGoesOnWhenHeartRateIsNoLongerValid()
+    {
+        var late = Session(new LocalDate(2027, 9, 10), ("foster_load", 300));
+
+        Assert.Equal(85, Order([], date => date < new LocalDate(2026, 3, 1)).Choose(late)!.Value);
+    }
+
+    [Fact]
     public void AFallbackThatTheSessionLacksOrThatCannotBeConvertedIsPassedOver() =>
         Assert.Equal("minutes", Choose(["foster_load", "work", "minutes"], ("work", 700), ("minutes", 60))!.From);
 

@@ -32,6 +32,18 @@ public class CommonCauseTests
         Assert.Equal("p0", Assert.Single(Build(people).Flagged).PersonId);
     }
 
+    [Fact]
+    public void WhoStoppedWeeksApartIsNamed()
+    {
+        var people = Enumerable.Range(0, 7).Select(number => Person(number, silent: true, expected: false)).ToList();
+        var apart = people.Select((subject, number) => subject with
+        {
+            Days = [new Day { Person = subject.Person.Id, Date = Date.PlusDays(-20 * (number + 1)), State = DayState.Recorded }, .. subject.Days],
+        });
+
+        Assert.Equal(7, Build(apart).Flagged.Count);
+    }
+
     [Theory]
     [InlineData(4, 4)]
     [InlineData(5, 11)]

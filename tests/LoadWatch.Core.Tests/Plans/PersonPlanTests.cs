@@ -40,6 +40,14 @@ public class PersonPlanTests
     }
 
     [Fact]
+    public void IllAndThenInjuredIsOneBreak()
+    {
+        var plan = new PersonPlan { Entries = [], Absences = [new Absence(AbsenceWord.Ill, On(0), On(3)), new Absence(AbsenceWord.Injured, On(4), On(9))] };
+
+        Assert.Equal([null, 1], new[] { 9, 10 }.Select(day => plan.On(On(day)).ReturnDay));
+    }
+
+    [Fact]
     public void SixDaysAwayAreNoBreak() =>
         Assert.Null(new PersonPlan { Entries = [], Absences = [new Absence(AbsenceWord.Away, On(0), On(5))] }.On(On(6)).ReturnDay);
 
