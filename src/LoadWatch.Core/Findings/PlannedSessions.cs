@@ -10,11 +10,11 @@ internal sealed class PlannedSessions(SilenceLimits limits)
     private const int WatchedDays = 28;
 
     private readonly List<LocalDate> without = [];
-    private LocalDate? lastExpected;
+    private readonly List<LocalDate> expected = [];
     private LocalDate today;
 
-    /// <summary>Whether the plan tells when recordings are to come.</summary>
-    public bool IsWatched => lastExpected is { } last && Period.DaysBetween(last, today) <= WatchedDays;
+    /// <summary>Whether the plan has told often enough when recordings are to come; a plan that begins does not hide a silence that stands.</summary>
+    public bool IsWatched => expected.Count(date => date.PlusDays(limits.PlannedWaitDays) <= today) >= limits.PlannedMissed;
 
     /// <summary>Dates without a recording, oldest first, those left out that may still come in.</summary>
     public IReadOnlyList<LocalDate> Missed => [.. without.TakeWhile(date => date.PlusDays(limits.PlannedWaitDays) <= today)];
@@ -22,9 +22,10 @@ internal sealed class PlannedSessions(SilenceLimits limits)
     public void Add(Day day)
     {
         today = day.Date;
+        expected.RemoveAll(date => Period.DaysBetween(date, today) > WatchedDays);
         if (day.Plan.Expected > 0)
         {
-            lastExpected = day.Date;
+            expected.Add(day.Date);
         }
 
         if (day.State == DayState.Recorded || day.Plan.Absence is not null)

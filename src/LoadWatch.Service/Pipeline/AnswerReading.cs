@@ -120,7 +120,7 @@ internal sealed class AnswerReading(WorkingConfiguration configuration, StoreSes
 
     private static string? WrongUntil(StoredRow row, AnswerRow answer) => answer.Until switch
     {
-        null => "shelve wants a last date",
+        null => "shelve wants a last date (until)",
         { } until when until < row.Date => "its last date lies before its first",
         { } until when until > row.Date.PlusDays(AlertReview.LongestShelvingDays) => $"shelved for more than {AlertReview.LongestShelvingDays} days",
         _ => null,
@@ -145,7 +145,10 @@ internal sealed class AnswerReading(WorkingConfiguration configuration, StoreSes
             : "it names no person and no group");
 
     private static BriefLine Question(StoredRow row, string reason) =>
-        new($"{row.Scope[(row.Scope.LastIndexOf('/') + 1)..]}, {DayAndMonth.Format(row.Date)}", reason);
+        new(NameOf(row.Scope), $"the answer of {DayAndMonth.Format(row.Date)}{(row.Subject.Length > 0 ? $" about {row.Subject}" : "")} is not followed: {reason}");
+
+    /// <summary>The table as its inbox names it.</summary>
+    private static string NameOf(string scope) => scope[(scope.IndexOf('/', StringComparison.Ordinal) + 1)..].Split('|')[0];
 
     private static DecisionKind OtherKind(AnswerWord word) => word switch
     {

@@ -146,7 +146,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         .. inboxesAway.Select(inbox => new BriefLine(inbox, "this inbox cannot be looked into: nothing comes in from it until its folder is back")),
         .. Files(session, contact),
         .. new OpenQuestions(configuration, now).Lines(session, contact, now.InZone(contact.Zone).Date),
-        .. contact.People.Count > 0 ? [] : new Answers(configuration, now).Questions(session),
+        .. contact.People.Count > 0 || contact.Role == ContactRole.FrontDesk ? [] : new Answers(configuration, now).Questions(session),
     ];
 
     private List<BriefLine> Files(StoreSession session, Contact contact)

@@ -58,8 +58,16 @@ public class PlannedSilenceTests
     }
 
     [Fact]
+    public void APlanThatBeginsDoesNotHideASilenceThatStands()
+    {
+        var days = Enumerable.Range(0, 40).Select(day => Of(day, recorded: day < 20, expected: day is 35 or 38)).ToList();
+
+        Assert.Contains(Rule.Of(days), finding => finding.Date == On(36));
+    }
+
+    [Fact]
     public void WhereAPlanExpectsRecordingsTheOwnRhythmIsNotAsked() =>
-        Assert.Empty(Rule.Of(Enumerable.Range(0, 40).Select(day => Of(day, recorded: day < 20, expected: day is 5 or 21)).ToList()));
+        Assert.Empty(Rule.Of(Enumerable.Range(0, 40).Select(day => Of(day, recorded: day < 20, expected: day is 5 or 19 or 21)).ToList()));
 
     /// <summary>Sessions on Tuesdays and Thursdays, each with a recording expected.</summary>
     private static List<Day> Weeks(int weeks, Func<int, bool> recorded) => Enumerable.Range(0, weeks * 7)

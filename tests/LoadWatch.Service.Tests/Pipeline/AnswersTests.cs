@@ -143,7 +143,7 @@ public sealed class AnswersTests : IDisposable
     [InlineData("ana", AnswerWord.Ill, null, "\"ana\" is no person and no group of the roster; did you mean \"anna\"?")]
     [InlineData("", AnswerWord.Seen, null, "it names no person and no group")]
     [InlineData("anna", AnswerWord.Ill, -1, "its last date lies before its first")]
-    [InlineData("anna", AnswerWord.Shelve, null, "shelve wants a last date")]
+    [InlineData("anna", AnswerWord.Shelve, null, "shelve wants a last date (until)")]
     [InlineData("anna", AnswerWord.Shelve, 61, "shelved for more than 60 days")]
     [InlineData("anna", AnswerWord.BelongsTo, null, "\"ride.fit\" is no file known here")]
     [InlineData("squad", AnswerWord.BelongsTo, null, "a file belongs to one person, not to a group")]
@@ -153,7 +153,8 @@ public sealed class AnswersTests : IDisposable
 
         var question = Assert.Single(folder.TakeUp().Questions);
 
-        Assert.Equal(("answers.csv, 15 June", reason), (question.Subject, question.Sentence));
+        Assert.Equal(
+            ("answers.csv", $"the answer of 15 June{(subject.Length > 0 ? $" about {subject}" : "")} is not followed: {reason}"), (question.Subject, question.Sentence));
         Assert.Equal([question], folder.Read((workplace, session) => new Answers(workplace.Configuration, WorkingFolder.Now).Questions(session)));
         Assert.Empty(folder.Decisions());
     }
@@ -183,7 +184,7 @@ public sealed class AnswersTests : IDisposable
         folder.Put("ride.fit", Some.Fit(Some.Yesterday, 30), Duration.FromMinutes(30));
         folder.PutRows(Row("anna", Today, Say(AnswerWord.BelongsTo, file: "ride.fit"), "anna"));
 
-        Assert.StartsWith("\"ride.fit\" is more than one file; ", Assert.Single(folder.Sweep().OpenAnswers).Sentence, StringComparison.Ordinal);
+        Assert.Contains(" is not followed: \"ride.fit\" is more than one file; ", Assert.Single(folder.Sweep().OpenAnswers).Sentence, StringComparison.Ordinal);
     }
 
     /// <summary>Whose the ride is decides whether anna has been silent for four days.</summary>
