@@ -15,6 +15,11 @@ internal static class BriefRows
     private const int WeekDays = 7;
     private const int RemarksShown = 2;
 
+    /// <summary>Recorded days from which on, and up to which, a region that no channel sees is told. A choice.</summary>
+    private const int UnseenFrom = 5;
+
+    private const int UnseenTo = 10;
+
     /// <summary>The last days before a recording comes in are ordinary.</summary>
     private const int TailDays = 5;
 
@@ -93,6 +98,11 @@ internal static class BriefRows
         yield return $"{view.Word(absence)} since {since.ToString("d MMMM", CultureInfo.InvariantCulture)}";
     }
 
+    /// <summary>Told while a record is young, then no more: a person with heart rate alone is not reminded of it every morning.</summary>
+    private static bool IsFirstUnseen(BriefSubject subject, Day? today) =>
+        today?.Regions.GetValueOrDefault(BodyRegion.Legs, RegionDay.NotCovered).DaysSince is null
+        && subject.Days.Count(day => day.State == DayState.Recorded) is >= UnseenFrom and <= UnseenTo;
+
     private static IEnumerable<string> Own(BriefSubject subject, Day? today, ReturnPhase? back, int knownOf7, int? neverHeavyDays)
     {
         if (back is not null)
@@ -124,6 +134,11 @@ internal static class BriefRows
         if (today?.ChronicBefore is null && back is null)
         {
             yield return "too few known days for a usual week";
+        }
+
+        if (IsFirstUnseen(subject, today))
+        {
+            yield return "leg work cannot be seen so far: logged sets, or power with critical_power, would tell";
         }
 
         if (neverHeavyDays is { } days)

@@ -84,6 +84,21 @@ public class CommonCauseTests
         Assert.StartsWith(remark, row.Remark, StringComparison.Ordinal);
     }
 
+    [Theory]
+    [InlineData(4, false)]
+    [InlineData(5, true)]
+    [InlineData(10, true)]
+    [InlineData(11, false)]
+    public void WhatWouldMakeLegWorkKnownIsToldWhileTheRecordIsYoung(int recorded, bool told)
+    {
+        var days = Enumerable.Range(0, recorded)
+            .Select(back => new Day { Person = "p0", Date = Date.PlusDays(-recorded + back), State = DayState.Recorded, Load = 50 })
+            .ToList();
+        var row = BriefBuilder.Build(Ada, Date, [Person(0, silent: false, expected: false) with { Days = days }], []).Groups[0].Rows[0];
+
+        Assert.Equal(told, row.Remark?.Contains("Leg work cannot be seen so far", StringComparison.OrdinalIgnoreCase) is true);
+    }
+
     private static Brief Build(IEnumerable<BriefSubject> people) => BriefBuilder.Build(Ada, Date, [.. people], []);
 
     private static BriefSubject Person(int number, bool silent, bool expected)
