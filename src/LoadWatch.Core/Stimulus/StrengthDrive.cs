@@ -17,7 +17,7 @@ public static class StrengthDrive
     {
         var load = Math.Min(1, relativeLoad);
         return repetitionsToFailure is { } failing && failing > 1
-            ? Math.Min(1, load / (1 - ((1 - load) * (repetition - 1) / (failing - 1))))
+            ? Math.Min(1, load * (failing - 1) / (failing - repetition + (load * (repetition - 1))))
             : load;
     }
 }
