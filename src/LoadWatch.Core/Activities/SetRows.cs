@@ -28,11 +28,6 @@ internal static class SetRows
     /// <summary>The word under which the table of exercises is asked; null where none is written.</summary>
     public static string? Exercise(SetRow row) => string.IsNullOrWhiteSpace(row.Exercise) ? null : row.Exercise;
 
-    private static SetLoad LoadOf(SetRow row) => row switch
-    {
-        { Load: SetRowLoad.Pin } or { Pin: not null, Kilograms: null } => SetLoad.Pin,
-        { Load: SetRowLoad.BodyWeight } => SetLoad.BodyWeight,
-        { Load: SetRowLoad.Band } => SetLoad.Band,
-        _ => SetLoad.Weight,
-    };
+    /// <summary>A pin's number without kilograms says how the load was made, whatever the column says.</summary>
+    private static SetLoad LoadOf(SetRow row) => row is { Pin: not null, Kilograms: null } ? SetLoad.Pin : row.Load;
 }

@@ -20,14 +20,11 @@ public static class OneRepetitionMaxEstimate
 
     /// <summary>Null where load, repetitions or reserve are unknown or too many.</summary>
     public static double? KilogramsOf(StrengthSet set) =>
-        set is { IsHold: false, IsFast: false, Load: SetLoad.Weight or SetLoad.Pin, Kilograms: > 0 and <= SetTotals.MostKilograms, Repetitions: >= 1 }
-        && ReserveOf(set) is { } reserve and >= 0
-        && LoadChart.Share(set.Repetitions.Value + reserve) is { } share
-            ? Significant.Round(set.Kilograms.Value / share)
+        set is { IsHold: false, IsFast: false }
+        && new StatedSet(set) is { Kilograms: { } kilograms, Repetitions: { } repetitions, Reserve: { } reserve }
+        && LoadChart.Share(repetitions + reserve) is { } share
+            ? Significant.Round(kilograms / share)
             : null;
-
-    /// <summary>As stated, else what a hardness of 10 less leaves.</summary>
-    private static double? ReserveOf(StrengthSet set) => set.RepetitionsInReserve ?? (10 - set.Hardness);
 
     /// <summary><c>one_repetition_max_of_leg_press</c>, <c>one_repetition_max_of_leg_press_on_press_2</c>.</summary>
     private static string NameOf(StrengthSet set)

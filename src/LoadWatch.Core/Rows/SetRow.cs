@@ -1,3 +1,4 @@
+using LoadWatch.Recordings;
 using NodaTime;
 
 namespace LoadWatch.Rows;
@@ -29,15 +30,6 @@ public sealed record SetRow(
     double? RepetitionsInReserve,
     double? Hardness,
     double? Seconds,
-    SetRowLoad Load,
+    SetLoad Load,
     bool IsHold,
     bool IsFast) : RowContent;
-
-/// <summary>How the load of a set was made.</summary>
-public enum SetRowLoad
-{
-    Weight,
-    Pin,
-    BodyWeight,
-    Band,
-}

@@ -59,7 +59,7 @@ internal static class Told
         layout,
         date ?? Given.Date,
         $"{order} {time} {exercise} {set}",
-        new SetRow(order, time, exercise, null, set, repetitions, kilograms, null, reserve, hardness, null, SetRowLoad.Weight, false, false));
+        new SetRow(order, time, exercise, null, set, repetitions, kilograms, null, reserve, hardness, null, SetLoad.Weight, false, false));
 
     public static Quantity Minutes(double value) => new(QuantityNames.Minutes, value, "min", Estimated: false);
 

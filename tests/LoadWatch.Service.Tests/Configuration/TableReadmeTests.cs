@@ -4,6 +4,7 @@ using System.Text.RegularExpressions;
 using LoadWatch.Decoding;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Plans;
+using LoadWatch.Recordings;
 using LoadWatch.Rows;
 using LoadWatch.Service.Configuration;
 
@@ -55,7 +56,7 @@ public sealed class TableReadmeTests
     [Fact]
     public void EveryWordIsNamed()
     {
-        Type[] types = [typeof(DeclaredContent), typeof(SetRowLoad), typeof(TestOutcome), typeof(DayWord), typeof(PlanWord), typeof(AnswerWord), typeof(TableNaming), typeof(TableCover), typeof(RowKind)];
+        Type[] types = [typeof(DeclaredContent), typeof(SetLoad), typeof(TestOutcome), typeof(DayWord), typeof(PlanWord), typeof(AnswerWord), typeof(TableNaming), typeof(TableCover), typeof(RowKind)];
 
         Assert.DoesNotContain(types.SelectMany(ValueCheck.WordsOf), word => !IsNamed(word));
         Assert.DoesNotContain(FunctionTests(), word => !IsNamed(word));

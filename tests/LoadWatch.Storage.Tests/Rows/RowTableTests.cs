@@ -1,5 +1,6 @@
 using LoadWatch.Loads;
 using LoadWatch.Plans;
+using LoadWatch.Recordings;
 using LoadWatch.Rows;
 using LoadWatch.Storage.Files;
 using LoadWatch.Storage.Rows;
@@ -14,7 +15,7 @@ public sealed class RowTableTests(SharedFolder shared) : StoreTest(shared)
     public static TheoryData<RowKind, RowContent> Contents => new()
     {
         { RowKind.Sessions, new SessionRow(2, new LocalTime(17, 30), "soccer", "rondo", 12.5, 7, [new Quantity("distance", 812.5, "m", false)], DeclaredContent.Match) },
-        { RowKind.Sets, new SetRow(1, null, "leg press", "B2", 3, 10, null, 7, null, 8.5, null, SetRowLoad.Pin, false, true) },
+        { RowKind.Sets, new SetRow(1, null, "leg press", "B2", 3, 10, null, 7, null, 8.5, null, SetLoad.Pin, false, true) },
         { RowKind.Tests, new TestRow("grip_strength", null, null, null, null, TestOutcome.Unable, "left", "old one", 0.43) },
         { RowKind.Days, new LoadWatch.Rows.DayRow(DayWord.Absent) },
         { RowKind.Plan, new PlanRow(PlanWord.LightWeek, Date.PlusDays(6), null, new LocalTime(0, 30), true, null) },

@@ -1,3 +1,4 @@
+using LoadWatch.Recordings;
 using LoadWatch.Rows;
 using NodaTime;
 
@@ -24,7 +25,7 @@ internal sealed class SetsTable : TableKind
         new NumberRole("repetitions_in_reserve", null, 0, 50),
         new NumberRole("hardness", null, 0, 10),
         new NumberRole("seconds", Measure.Seconds, 0, 86400),
-        new WordRole("load", Words<SetRowLoad>.All),
+        new WordRole("load", Words<SetLoad>.All),
         YesNo.Role("hold"),
         YesNo.Role("fast"),
     ];
@@ -49,7 +50,7 @@ internal sealed class SetsTable : TableKind
             values.Number("repetitions_in_reserve"),
             values.Number("hardness"),
             values.Number("seconds"),
-            values.Word<SetRowLoad>("load") ?? LoadOf(kilograms, pin),
+            values.Word<SetLoad>("load") ?? LoadOf(kilograms, pin),
             values.IsYes("hold"),
             values.IsYes("fast")));
     }
@@ -68,10 +69,10 @@ internal sealed class SetsTable : TableKind
     }
 
     /// <summary>Where no word says it: a weight of 0 is body weight, a pin without kilograms is a pin, anything else a weight, known or not.</summary>
-    private static SetRowLoad LoadOf(double? kilograms, double? pin) => (kilograms, pin) switch
+    private static SetLoad LoadOf(double? kilograms, double? pin) => (kilograms, pin) switch
     {
-        (0, _) => SetRowLoad.BodyWeight,
-        (null, not null) => SetRowLoad.Pin,
-        _ => SetRowLoad.Weight,
+        (0, _) => SetLoad.BodyWeight,
+        (null, not null) => SetLoad.Pin,
+        _ => SetLoad.Weight,
     };
 }

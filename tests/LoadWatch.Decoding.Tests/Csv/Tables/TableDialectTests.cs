@@ -77,7 +77,7 @@ public class TableDialectTests
         Assert.NotEmpty(writing);
         Assert.Empty(file.Problems);
         Assert.Equal(("table", "kraft"), (file.Kind, file.SourceName));
-        var set = new SetRow(null, null, "leg_press", null, 1, 8, 82.5, null, null, null, null, SetRowLoad.Weight, IsHold: false, IsFast: false);
+        var set = new SetRow(null, null, "leg_press", null, 1, 8, 82.5, null, null, null, null, SetLoad.Weight, IsHold: false, IsFast: false);
         Assert.Equal(
             [("aada", new LocalDate(2026, 10, 5), set), ("aada", new LocalDate(2026, 10, 6), set with { Set = 2, Kilograms = null })],
             file.Table!.Rows.Select(row => (row.Subject, row.Date, row.Content)));

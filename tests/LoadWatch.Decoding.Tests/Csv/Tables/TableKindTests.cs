@@ -2,6 +2,7 @@ using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
 using LoadWatch.Loads;
 using LoadWatch.Plans;
+using LoadWatch.Recordings;
 using LoadWatch.Rows;
 using NodaTime;
 
@@ -60,16 +61,16 @@ public class TableKindTests
 
         // 100 lb = 45.359237 kg by definition of the pound.
         Assert.Equal(
-            new SetRow(null, new LocalTime(17, 5, 9), "plank", "B2", null, null, 45.359237, 4, 1.5, 8, 90, SetRowLoad.Band, IsHold: true, IsFast: false), row);
+            new SetRow(null, new LocalTime(17, 5, 9), "plank", "B2", null, null, 45.359237, 4, 1.5, 8, 90, SetLoad.Band, IsHold: true, IsFast: false), row);
     }
 
     [Theory]
-    [InlineData("80", "", SetRowLoad.Weight)]
-    [InlineData("80", "3", SetRowLoad.Weight)]
-    [InlineData("0", "", SetRowLoad.BodyWeight)]
-    [InlineData("", "3", SetRowLoad.Pin)]
-    [InlineData("", "", SetRowLoad.Weight)]
-    public void WithoutAWordTheLoadFollowsFromTheCells(string kilograms, string pin, SetRowLoad expected) => Assert.Equal(
+    [InlineData("80", "", SetLoad.Weight)]
+    [InlineData("80", "3", SetLoad.Weight)]
+    [InlineData("0", "", SetLoad.BodyWeight)]
+    [InlineData("", "3", SetLoad.Pin)]
+    [InlineData("", "", SetLoad.Weight)]
+    public void WithoutAWordTheLoadFollowsFromTheCells(string kilograms, string pin, SetLoad expected) => Assert.Equal(
         expected, TableFiles.Contents<SetRow>($"date,exercise,repetitions,kilograms,pin\n2026-10-05,squat,8,{kilograms},{pin}\n")[0].Load);
 
     [Theory]

@@ -1,6 +1,7 @@
 using System.Text.Json;
 using System.Text.Json.Serialization;
 using LoadWatch.Decoding.Csv;
+using LoadWatch.Recordings;
 using LoadWatch.Rows;
 
 namespace LoadWatch.Decoding.Tests.Csv.Tables;
@@ -124,7 +125,7 @@ public class TableLayoutTests
         var table = TableFiles.Decode("Tag;Nr;Übung;lb 1\n05.10.2026;aada;Beinpresse;100\n", layout).Table!;
         Assert.Equal((RowKind.Sets, "gym", true, true), (table.Kind, table.Layout, table.IsNamedByFolder, table.CoversEverything));
         Assert.Equal(
-            new SetRow(null, null, "leg_press", "B2", 1, null, 45.359237, null, null, null, null, SetRowLoad.Weight, IsHold: false, IsFast: true),
+            new SetRow(null, null, "leg_press", "B2", 1, null, 45.359237, null, null, null, null, SetLoad.Weight, IsHold: false, IsFast: true),
             Assert.Single(table.Rows).Content);
     }
 

@@ -1,4 +1,5 @@
 using LoadWatch.Decoding.Csv;
+using LoadWatch.Recordings;
 using LoadWatch.Rows;
 using NodaTime;
 
@@ -133,7 +134,7 @@ public class TableWideTests
         };
 
         Assert.Equal(
-            [(SetRowLoad.BodyWeight, 12)],
+            [(SetLoad.BodyWeight, 12)],
             TableFiles.Contents<SetRow>("date,exercise\n2026-10-05,squat\n", layout).Select(set => (set.Load, set.Repetitions!.Value)));
     }
 
