@@ -17,21 +17,31 @@ public static class UsableSamples
     /// <summary>The channels with a reading, heart rate also where beats came only in messages of their own.</summary>
     public static IEnumerable<Channel> ChannelsOf(Recording recording) =>
         Enum.GetValues<Channel>().Where(channel =>
-            recording.Samples.Has(channel) || (channel == Channel.HeartRate && recording.LateHeartRates.Count > 0));
+            recording.SeriesOf(channel).Has(channel) || (channel == Channel.HeartRate && recording.LateHeartRates.Count > 0));
 
     public static UsableChannel Of(Recording recording, Channel channel)
     {
-        var rows = DatedRows(recording.Samples, channel);
+        var rows = RowsOf(recording, channel);
+        var usable = rows.TrueForAll(row => ChannelLimits.Usable(channel, row.Value, recording.Sport))
+            ? rows
+            : rows.FindAll(row => ChannelLimits.Usable(channel, row.Value, recording.Sport));
+        return new UsableChannel(channel, WithDurations(usable), Share(usable, rows));
+    }
+
+    /// <summary>The rows that count for a channel within some stretches, in time order; a row without a reading is NaN.</summary>
+    internal static IEnumerable<(long UnixMilliseconds, double Value)> Rows(Recording recording, Channel channel, IReadOnlyList<Stretch> within) =>
+        RowsOf(recording, channel).Where(row => within.Any(stretch => stretch.Holds(row.Time))).Select(row => (row.Time, row.Value));
+
+    private static List<Row> RowsOf(Recording recording, Channel channel)
+    {
+        var rows = DatedRows(recording.SeriesOf(channel), channel);
         if (channel == Channel.HeartRate && recording.LateHeartRates.Count > 0)
         {
             rows.AddRange(LateRows(recording.LateHeartRates, rows));
         }
 
         SortByTime(rows);
-        var usable = rows.TrueForAll(row => ChannelLimits.Usable(channel, row.Value, recording.Sport))
-            ? rows
-            : rows.FindAll(row => ChannelLimits.Usable(channel, row.Value, recording.Sport));
-        return new UsableChannel(channel, WithDurations(usable), Share(usable, rows));
+        return rows;
     }
 
     private static List<Row> DatedRows(SampleSeries series, Channel channel)

@@ -1,0 +1,47 @@
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Activities;
+
+/// <summary>Makes one recording of those of an activity, as its plan says: every number computed from it is explained by recordings that are named.</summary>
+public static class MergedSession
+{
+    /// <summary>The winner's own recording where it gives everything. Laps, lengths and pauses are the winner's.</summary>
+    /// <param name="recordings">By key: at least those that give.</param>
+    /// <returns>Null where no recording gives anything.</returns>
+    public static Recording? Of(SessionPlan plan, IReadOnlyDictionary<string, Recording> recordings)
+    {
+        ArgumentNullException.ThrowIfNull(plan);
+        if (plan.Contributions[0] is { Role: ContributionRole.Wins, Gifts: null } winner)
+        {
+            return recordings[winner.Key];
+        }
+
+        var givers = plan.Givers.Select(key => recordings[key]).ToList();
+        return givers.Count == 0 ? null : givers[0] with
+        {
+            Start = plan.Frame.Start,
+            LocalOffset = plan.Winner.LocalOffset,
+            ElapsedSeconds = plan.Frame.ElapsedSeconds,
+            TimerSeconds = plan.Frame.TimerSeconds,
+            DistanceMetres = plan.Frame.DistanceMetres,
+            Sport = plan.Frame.Sport,
+            Samples = SampleSeries.Empty,
+            Gathered = Gifts(plan).Where(one => one.Gift.Channel is not null).GroupBy(one => one.Gift.Channel!.Value).ToDictionary(
+                channel => channel.Key,
+                channel => Series(channel.Key, channel.SelectMany(one => UsableSamples.Rows(recordings[one.Key], channel.Key, one.Gift.Stretches)))),
+            LateHeartRates = [],
+            Sets = [.. Gifts(plan).Where(one => one.Gift.Whole == WholeGift.Sets).SelectMany(one => recordings[one.Key].Sets)],
+        };
+    }
+
+    private static IEnumerable<(string Key, Gift Gift)> Gifts(SessionPlan plan) =>
+        plan.Contributions.SelectMany(one => (one.Gifts ?? []).Select(gift => (one.Key, gift)));
+
+    private static SampleSeries Series(Channel channel, IEnumerable<(long UnixMilliseconds, double Value)> rows)
+    {
+        var sorted = rows.OrderBy(row => row.UnixMilliseconds).ToList();
+        return new SampleSeries(
+            [.. sorted.Select(row => row.UnixMilliseconds)],
+            new Dictionary<Channel, double[]> { [channel] = [.. sorted.Select(row => row.Value)] });
+    }
+}
