@@ -34,7 +34,7 @@ public sealed record RecordingSummary(
     public double? DistanceMetres { get; init; }
 
     /// <summary><c>sha/part</c>: the key of the activity that this recording wins.</summary>
-    public string Key => $"{Sha}/{Part}";
+    public string Key => RecordingKey.Of(Sha, Part);
 
     /// <summary>The local date that the session counts for.</summary>
     public LocalDate Date => Start.WithOffset(LocalOffset).Date;

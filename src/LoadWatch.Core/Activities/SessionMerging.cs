@@ -39,7 +39,7 @@ internal sealed class SessionMerging(
             sport?.Sport ?? group.Winner.Sport,
             sets.Sum(one => one.Sets),
             distance is null || (distance == group.Winner && span.IsCut) ? null : distance.DistanceMetres);
-        return new SessionPlan(group.Winner, frame, Contributions(gifts.ToLookup(gift => gift.Recording, gift => gift.Gift)));
+        return new SessionPlan(group.Winner, frame, Contributions(gifts.ToLookup(gift => gift.Recording, gift => gift.Gift), span.IsCut));
     }
 
     private IEnumerable<(RecordingSummary Recording, Gift Gift)> RateGifts(Channel channel) =>
@@ -79,10 +79,10 @@ internal sealed class SessionMerging(
 
     private IEnumerable<RecordingSummary> Others(RecordingSummary? one) => one is null || one == group.Winner ? [] : [one];
 
-    private List<Contribution> Contributions(ILookup<RecordingSummary, Gift> gifts)
+    private List<Contribution> Contributions(ILookup<RecordingSummary, Gift> gifts, bool isCut)
     {
         var others = group.Others.Select(one => (Recording: one, Gifts: gifts[one].ToList())).ToList();
-        var isAlone = role(group.Winner) == ContributionRole.Wins && others.TrueForAll(one => one.Gifts.Count == 0) && gifts[group.Winner].All(IsWhole);
+        var isAlone = !isCut && role(group.Winner) == ContributionRole.Wins && others.TrueForAll(one => one.Gifts.Count == 0) && gifts[group.Winner].All(IsWhole);
         return
         [
             new Contribution(group.Winner.Key, role(group.Winner), isAlone ? null : [.. gifts[group.Winner]]),

@@ -75,10 +75,10 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
         return new ActivityLine(
             owner.Id,
             Words.Date(activity.Date),
-            activity.Start is { } start ? Words.Start(start.WithOffset(recorded?.Winner.LocalOffset ?? owner.Zone.GetUtcOffset(start))) : null,
+            activity.Start is { } start ? Words.Start(start.WithOffset(recorded?.Session.LocalOffset ?? owner.Zone.GetUtcOffset(start))) : null,
             activity.Sport.ToString(),
-            recorded?.Winner.ElapsedSeconds,
-            recorded?.Winner.TimerSeconds,
+            recorded?.Session.ElapsedSeconds,
+            recorded?.Session.TimerSeconds,
             activity.Quantities.Select(quantity => new QuantityLine(quantity.Name, quantity.Value, quantity.Unit, quantity.Estimated)).ToList(),
             configuration.Groups[owner.Group].LoadQuantity,
             TimesInZone(values.TimesInZone),
