@@ -40,7 +40,7 @@ internal sealed class ChannelGifts
     /// <summary>The stretches that each recording gives; none that gives nothing.</summary>
     public IEnumerable<(RecordingSummary Recording, Gift Gift)> Gifts => shares
         .GroupBy(share => share.Recording, share => share.Stretch)
-        .Select(given => (given.Key, new Gift(channel, null, [.. given.OrderBy(one => one.From is not null).ThenBy(one => one.From).SelectMany(one => Left(given.Key, one))])))
+        .Select(given => (given.Key, new Gift(channel, null, [.. given.OrderBy(one => one.From is not null).ThenBy(one => one.From).SelectMany(one => one.Without(claimed(given.Key)))])))
         .Where(given => given.Item2.Stretches.Count > 0);
 
     private ChannelExtent? Extent(RecordingSummary recording) => recording.Channels[channel];
@@ -80,11 +80,4 @@ internal sealed class ChannelGifts
     /// <summary>How long the recording has usable readings of the channel within the stretch that no other activity claims, milliseconds.</summary>
     private long Free(RecordingSummary recording, Stretch stretch) =>
         new Stretch(Extent(recording)!.First, Extent(recording)!.Last + 1).Within(stretch) is { } own ? own.Without(claimed(recording)).Length() : 0;
-
-    /// <summary>
-    /// Where readings go on behind a claimed stretch, the last one before it would stand for up to 10 s of it: those seconds are left out, and the reading
-    /// before them stands for them.
-    /// </summary>
-    private IEnumerable<Stretch> Left(RecordingSummary recording, Stretch stretch) => stretch.Without(
-        claimed(recording).Select(claim => last >= claim.To ? claim with { From = claim.From - UsableSamples.LongestMilliseconds } : claim));
 }

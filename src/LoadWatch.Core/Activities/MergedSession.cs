@@ -28,7 +28,7 @@ public static class MergedSession
             Samples = SampleSeries.Empty,
             Gathered = Gifts(plan).Where(one => one.Gift.Channel is not null).GroupBy(one => one.Gift.Channel!.Value).ToDictionary(
                 channel => channel.Key,
-                channel => Series(channel.Key, channel.SelectMany(one => UsableSamples.Rows(recordings[one.Key], channel.Key, one.Gift.Stretches)))),
+                channel => Series(channel.Key, channel.SelectMany(one => one.Gift.Stretches.Select(stretch => (recordings[one.Key], stretch))))),
             LateHeartRates = [],
             Sets = [.. Gifts(plan).Where(one => one.Gift.Whole == WholeGift.Sets).SelectMany(one => recordings[one.Key].Sets)],
         };
@@ -37,11 +37,31 @@ public static class MergedSession
     private static IEnumerable<(string Key, Gift Gift)> Gifts(SessionPlan plan) =>
         plan.Contributions.SelectMany(one => (one.Gifts ?? []).Select(gift => (one.Key, gift)));
 
-    private static SampleSeries Series(Channel channel, IEnumerable<(long UnixMilliseconds, double Value)> rows)
+    /// <param name="given">Stretches do not overlap.</param>
+    private static SampleSeries Series(Channel channel, IEnumerable<(Recording Recording, Stretch Stretch)> given)
     {
-        var sorted = rows.OrderBy(row => row.UnixMilliseconds).ToList();
+        var rows = new List<(long UnixMilliseconds, double Value)>();
+        long? end = null;
+        foreach (var (recording, stretch) in given.OrderBy(one => one.Stretch.From is not null).ThenBy(one => one.Stretch.From))
+        {
+            var next = UsableSamples.Rows(recording, channel, stretch).ToList();
+            if (stretch.From > end && next.Count > 0)
+            {
+                rows.RemoveAll(row => StandsBeyond(row.UnixMilliseconds, end.Value));
+            }
+
+            rows.AddRange(next);
+            end = stretch.To;
+        }
+
         return new SampleSeries(
-            [.. sorted.Select(row => row.UnixMilliseconds)],
-            new Dictionary<Channel, double[]> { [channel] = [.. sorted.Select(row => row.Value)] });
+            [.. rows.Select(row => row.UnixMilliseconds)],
+            new Dictionary<Channel, double[]> { [channel] = [.. rows.Select(row => row.Value)] });
     }
+
+    /// <summary>
+    /// Where readings go on behind a stretch that another activity counts, the last ones before it would stand for up to 10 s of it. They are left out; the
+    /// reading before them stands for their time.
+    /// </summary>
+    private static bool StandsBeyond(long time, long end) => time > end - UsableSamples.LongestMilliseconds;
 }

@@ -24,7 +24,7 @@ internal sealed class SessionClaims(IReadOnlyList<SessionGroup> groups, Func<Ses
         }
 
         var poorer = groups.Skip(at + 1).Select(group => group.Winner)
-            .Concat(richer.SelectMany(group => group.Others.Where(other => mayGive(group, other) && Has(other, channel))));
+            .Concat(richer.SelectMany(group => group.Others.Where(other => mayGive(group, other))));
         return [.. Taken(richer.Select(group => group.Winner), recording), .. Taken(poorer, recording).SelectMany(stretch => stretch.Without([Ran(winner)]))];
     }
 
@@ -35,6 +35,4 @@ internal sealed class SessionClaims(IReadOnlyList<SessionGroup> groups, Func<Ses
 
     private bool Has(SessionGroup group, Channel? channel) =>
         channel is null || group.Recordings.Any(recording => mayGive(group, recording) && recording.Channels[channel.Value] is { IsUsable: true });
-
-    private static bool Has(RecordingSummary recording, Channel? channel) => channel is not { } wanted || recording.Channels[wanted] is { IsUsable: true };
 }

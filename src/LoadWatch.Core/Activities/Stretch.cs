@@ -25,13 +25,13 @@ internal static class Stretches
         return left;
     }
 
-    /// <summary>Sorted, and those that meet or overlap made one. All must have both ends.</summary>
+    /// <summary>Sorted, and those that meet or overlap made one; a millisecond is no gap. All must have both ends.</summary>
     public static IReadOnlyList<Stretch> Joined(this IEnumerable<Stretch> stretches)
     {
         var joined = new List<Stretch>();
         foreach (var one in stretches.OrderBy(one => one.From).ThenBy(one => one.To))
         {
-            if (joined.Count > 0 && one.From <= joined[^1].To)
+            if (joined.Count > 0 && one.From <= joined[^1].To + 1)
             {
                 joined[^1] = joined[^1] with { To = Math.Max(joined[^1].To!.Value, one.To!.Value) };
             }

@@ -28,9 +28,9 @@ public static class UsableSamples
         return new UsableChannel(channel, WithDurations(usable), Share(usable, rows));
     }
 
-    /// <summary>The rows that count for a channel within some stretches, in time order; a row without a reading is NaN.</summary>
-    internal static IEnumerable<(long UnixMilliseconds, double Value)> Rows(Recording recording, Channel channel, IReadOnlyList<Stretch> within) =>
-        RowsOf(recording, channel).Where(row => within.Any(stretch => stretch.Holds(row.Time))).Select(row => (row.Time, row.Value));
+    /// <summary>The rows that count for a channel within a stretch, in time order; a row without a reading is NaN.</summary>
+    internal static IEnumerable<(long UnixMilliseconds, double Value)> Rows(Recording recording, Channel channel, Stretch within) =>
+        RowsOf(recording, channel).Where(row => within.Holds(row.Time)).Select(row => (row.Time, row.Value));
 
     private static List<Row> RowsOf(Recording recording, Channel channel)
     {

@@ -95,7 +95,7 @@ public class SessionPlansTests
             .First(quantity => quantity.Name == QuantityNames.BanisterTrimp).Value;
 
         // 140 bpm all the time: the load is proportional to the minutes, so three times that of 40 min.
-        Assert.Equal(3 * Load(worn[0].Recording)!.Value, Load(Worn.Merged(Worn.Plans(worn)[0], worn).Recording)!.Value, 6);
+        Assert.Equal(3 * Load(worn[0].Recording)!.Value, Load(Worn.Merged(Worn.Plans(worn)[0], worn).Recording)!.Value, 5);
     }
 
     [Fact]
@@ -129,7 +129,7 @@ public class SessionPlansTests
 
         Assert.Equal(["first/1", "second/1"], plans.Select(plan => plan.Winner.Key));
         Assert.Equal([100 * 60, 60 * 60.0], plans.Select(plan => plan.Frame.ElapsedSeconds));
-        Assert.Equal([100, 60], plans.Select(plan => Worn.Minutes(plan, Channel.HeartRate, worn) is var minutes && minutes > 99.7 ? Math.Ceiling(minutes) : minutes));
+        Assert.Equal([100, 60], plans.Select(plan => Worn.Minutes(plan, Channel.HeartRate, worn)));
         Assert.Equal([70, 60], plans.Select(plan => Worn.Minutes(plan, Channel.Power, worn)));
     }
 
@@ -164,7 +164,7 @@ public class SessionPlansTests
 
         Assert.Equal(partsAreRicher ? 3 : 1, plans.Count);
         Assert.Equal(134 * 60, plans.Sum(plan => plan.Frame.ElapsedSeconds)!.Value, 6);
-        Assert.InRange(plans.Sum(plan => Worn.Minutes(plan, Channel.HeartRate, worn)), 133, 134);
+        Assert.Equal(134, plans.Sum(plan => Worn.Minutes(plan, Channel.HeartRate, worn)), 6);
     }
 
     [Fact]
