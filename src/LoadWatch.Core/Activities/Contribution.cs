@@ -26,6 +26,9 @@ public enum ContributionRole
 /// <param name="Gifts">Null: all that it holds, as it is.</param>
 public sealed record Contribution(string Key, ContributionRole Role, IReadOnlyList<Gift>? Gifts)
 {
+    /// <summary>The device or layout that wrote it (I-6): a source has recorded, also where another one counts.</summary>
+    public string Source { get; init; } = "";
+
     public bool IsAs(Contribution other) =>
         Key == other.Key
         && Role == other.Role

@@ -85,8 +85,8 @@ internal sealed class SessionMerging(
         var isAlone = !isCut && role(group.Winner) == ContributionRole.Wins && others.TrueForAll(one => one.Gifts.Count == 0) && gifts[group.Winner].All(IsWhole);
         return
         [
-            new Contribution(group.Winner.Key, role(group.Winner), isAlone ? null : [.. gifts[group.Winner]]),
-            .. others.Select(one => new Contribution(one.Recording.Key, RoleOf(one.Recording, one.Gifts), one.Gifts)),
+            new Contribution(group.Winner.Key, role(group.Winner), isAlone ? null : [.. gifts[group.Winner]]) { Source = group.Winner.Source },
+            .. others.Select(one => new Contribution(one.Recording.Key, RoleOf(one.Recording, one.Gifts), one.Gifts) { Source = one.Recording.Source }),
         ];
     }
 

@@ -40,8 +40,7 @@ public sealed class SessionValues(ArrivalDecoder decoder, RecordingShelf shelf)
         try
         {
             var recordings = plan.Givers.ToDictionary(key => key, key => shelf.Find(key, arrivalOf)!, StringComparer.Ordinal);
-            var values = MergedSession.Of(plan, recordings) is { } merged ? decoder.Values(merged, plan.Winner.Person) : new ActivityValues();
-            return WithRemarks(plan, values);
+            return WithRemarks(plan, MergedSession.Of(plan, recordings) is { } merged ? decoder.Values(merged, plan.Winner.Person) : new ActivityValues());
         }
         catch (Exception e) when (ArrivalDecoder.IsDefect(e))
         {

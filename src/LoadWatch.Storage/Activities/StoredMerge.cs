@@ -10,7 +10,7 @@ public sealed record StoredMerge(RecordingSummary Winner, SessionFrame Frame, IR
 {
     /// <summary>That of a recording alone.</summary>
     public static StoredMerge Of(RecordingSummary alone) =>
-        new(alone, SessionFrame.Of(alone), [new Contribution(alone.Key, ContributionRole.Wins, null)]);
+        new(alone, SessionFrame.Of(alone), [new Contribution(alone.Key, ContributionRole.Wins, null) { Source = alone.Source }]);
 
     public static StoredMerge Of(SessionPlan plan) => new(plan.Winner, plan.Frame, plan.Contributions);
 

@@ -91,6 +91,24 @@ public sealed class ActivityTableTests : StoreTest
     }
 
     [Fact]
+    public void HowActivitiesWereMadeIsReadByTheStartOfTheirWinners()
+    {
+        Store.Write(session =>
+        {
+            session.Activities.Put(Full());
+            session.Activities.Put(Some.Activity(2));
+        });
+
+        var (from, to) = (Some.Recording(1).Start, Some.Recording(2).Start);
+        var read = Store.Read(session => session.Activities.Merges("anna", from, to));
+
+        Assert.Equal([Full().Key, Some.Activity(2).Key], read.Select(merge => merge.Winner.Key));
+        Assert.Equal([Full().Merge.Frame, SessionFrame.Of(Some.Recording(2))], read.Select(merge => merge.Frame));
+        Assert.Single(Store.Read(session => session.Activities.Merges("anna", to, to)));
+        Assert.Empty(Store.Read(session => session.Activities.Merges("bo", from, to)));
+    }
+
+    [Fact]
     public void ARemovedActivityLeavesNothing()
     {
         Store.Write(session => session.Activities.Put(Full()));
