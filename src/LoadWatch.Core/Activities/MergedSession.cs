@@ -1,3 +1,4 @@
+using System.Globalization;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Activities;
@@ -5,6 +6,8 @@ namespace LoadWatch.Activities;
 /// <summary>Makes one recording of those of an activity, as its plan says: every number computed from it is explained by recordings that are named.</summary>
 public static class MergedSession
 {
+    private const double MostOf = 0.9;
+
     /// <summary>The winner's own recording where it gives everything. Laps, lengths and pauses are the winner's.</summary>
     /// <param name="recordings">By key: at least those that give.</param>
     /// <returns>Null where no recording gives anything.</returns>
@@ -33,6 +36,16 @@ public static class MergedSession
             Sets = [.. Gifts(plan).Where(one => one.Gift.Whole == WholeGift.Sets).SelectMany(one => recordings[one.Key].Sets)],
         };
     }
+
+    /// <summary>Channels that tell only of a part of a session of several recordings: what is computed of them is of that part.</summary>
+    public static IEnumerable<string> Partial(SessionPlan plan, ActivityValues values) => plan.Contributions[0].Gifts is null || plan.Frame.ElapsedSeconds is not { } elapsed
+        ? []
+        : values.Histograms
+            .OrderBy(one => one.Key)
+            .Where(one => one.Value.TotalMilliseconds < MostOf * elapsed * 1000)
+            .Select(one => $"{ChannelWords.Of(one.Key)} in {Minutes(one.Value.TotalMilliseconds)} of {Minutes(elapsed * 1000)} min: what is computed from it is of those");
+
+    private static string Minutes(double milliseconds) => (milliseconds / 60_000).ToString("0", CultureInfo.InvariantCulture);
 
     private static IEnumerable<(string Key, Gift Gift)> Gifts(SessionPlan plan) =>
         plan.Contributions.SelectMany(one => (one.Gifts ?? []).Select(gift => (one.Key, gift)));

@@ -10,8 +10,17 @@ public sealed record SessionPlan(RecordingSummary Winner, SessionFrame Frame, IR
     /// <summary>The recordings without which the activity cannot be computed.</summary>
     public IEnumerable<string> Givers => Contributions.Where(one => one.Role is ContributionRole.Wins or ContributionRole.Gives).Select(one => one.Key);
 
-    public bool IsAs(SessionFrame frame, IReadOnlyList<Contribution> contributions) =>
-        Frame == frame && Contributions.Count == contributions.Count && Contributions.Zip(contributions).All(pair => pair.First.IsAs(pair.Second));
+    public bool IsAs(SessionFrame frame, IReadOnlyList<Contribution> contributions) => Frame == frame && AreAs(Contributions, contributions);
+
+    /// <summary>Whether the same values come of it, whatever else became of recordings that give nothing.</summary>
+    public bool GivesAs(SessionFrame frame, IReadOnlyList<Contribution> contributions) =>
+        Frame == frame && AreAs(Bearing(Contributions), Bearing(contributions));
+
+    private static List<Contribution> Bearing(IReadOnlyList<Contribution> contributions) =>
+        [.. contributions.Where(one => one.Role is ContributionRole.Wins or ContributionRole.Gives or ContributionRole.Unreadable)];
+
+    private static bool AreAs(IReadOnlyList<Contribution> some, IReadOnlyList<Contribution> others) =>
+        some.Count == others.Count && some.Zip(others).All(pair => pair.First.IsAs(pair.Second));
 }
 
 /// <summary>What the recordings of one activity say of the session as a whole.</summary>

@@ -26,7 +26,7 @@ public static class FileExplanation
         text.AppendLine(CultureInfo.InvariantCulture, $"    {Words.Of(arrival.State)}{(arrival.Reason is { } reason ? $": {OneLine.Of(reason)}" : "")}");
         foreach (var sighting in session.Sightings.Of(arrival.Sha))
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    seen as {OneLine.Of(sighting.Path)} in {OneLine.Of(sighting.Inbox)}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    seen as {OneLine.Of(sighting.Path)} in {OneLine.Of(sighting.Inbox)}{(sighting.Latest ? "" : ", where other bytes are by now")}");
         }
 
         if (arrival.ParentSha is { } parent)

@@ -80,8 +80,8 @@ public sealed class ArrivalEffects(StoreSession session, RecordingShelf shelf, S
 
     private void Update(IReadOnlyList<RecordingSummary> group, SessionPlanning planning)
     {
-        var stored = Stored(group);
-        var plans = planning.Plan(group, plan => Changes(plan, stored) && !values.IsKnown(plan));
+        var stored = planning.Stored(group);
+        var plans = planning.Plan(group, plan => planning.ChangeOf(plan, stored) == SessionChange.Values && !values.IsKnown(plan));
         var winners = plans.Select(plan => plan.Winner.Key).ToHashSet(StringComparer.Ordinal);
         foreach (var lost in stored.Values.Where(one => !winners.Contains(one.Winner.Key)))
         {
@@ -89,30 +89,27 @@ public sealed class ArrivalEffects(StoreSession session, RecordingShelf shelf, S
             session.People.MarkDirty(lost.Winner.Person, lost.Date);
         }
 
-        foreach (var plan in plans.Where(plan => Changes(plan, stored)))
+        foreach (var plan in plans)
         {
-            Put(plan, stored.GetValueOrDefault(plan.Winner.Key));
+            Put(plan, planning.ChangeOf(plan, stored), stored.GetValueOrDefault(plan.Winner.Key));
         }
     }
 
-    private Dictionary<string, StoredMerge> Stored(IReadOnlyList<RecordingSummary> group)
-    {
-        var keys = group.Select(one => one.Key).ToHashSet(StringComparer.Ordinal);
-        return session.Activities.Merges(group[0].Person, group.Min(one => one.Start), group.Max(one => one.Start))
-            .Where(one => keys.Contains(one.Winner.Key))
-            .ToDictionary(one => one.Winner.Key, StringComparer.Ordinal);
-    }
-
-    private void Put(SessionPlan plan, StoredMerge? before)
+    private void Put(SessionPlan plan, SessionChange change, StoredMerge? before)
     {
         var merge = StoredMerge.Of(plan);
-        session.Activities.Put(new StoredActivity(merge, values.Of(plan, session.Arrivals.Get)));
+        switch (change)
+        {
+            case SessionChange.None:
+                return;
+            case SessionChange.Recordings:
+                session.Activities.PutRecordings(merge);
+                break;
+            default:
+                session.Activities.Put(new StoredActivity(merge, values.Of(plan, session.Arrivals.Get)));
+                break;
+        }
+
         session.People.MarkDirty(plan.Winner.Person, before is null ? merge.Date : LocalDate.Min(before.Date, merge.Date));
     }
-
-    /// <summary>What gives was computed anew, or something else gives.</summary>
-    private bool Changes(SessionPlan plan, Dictionary<string, StoredMerge> stored) =>
-        plan.Givers.Any(key => shelf.FreshOf(key) is not null)
-        || !stored.TryGetValue(plan.Winner.Key, out var before)
-        || !plan.IsAs(before.Frame, before.Contributions);
 }

@@ -32,8 +32,14 @@ public sealed class Foresight(Store store, RecordingShelf shelf, SessionValues v
         var planning = new SessionPlanning(session, shelf, (from, to) => session.Recordings.Starting(person, from, to)
             .Where(recording => !judged.Contains(recording.Sha))
             .Concat(fresh.Where(recording => recording.Start >= from && recording.Start <= to)));
-        return planning.Around(fresh).Where(group => group.Count > 1).SelectMany(group => planning.Plan(group, IsWanted).Where(IsWanted));
+        return planning.Around(fresh).Where(group => group.Count > 1).SelectMany(group => Wanted(planning, group));
     }
 
-    private bool IsWanted(SessionPlan plan) => !values.IsKnown(plan);
+    private IEnumerable<SessionPlan> Wanted(SessionPlanning planning, IReadOnlyList<RecordingSummary> group)
+    {
+        var stored = planning.Stored(group);
+        return planning.Plan(group, IsWanted).Where(IsWanted);
+
+        bool IsWanted(SessionPlan plan) => planning.ChangeOf(plan, stored) == SessionChange.Values && !values.IsKnown(plan);
+    }
 }

@@ -1,5 +1,6 @@
 using LoadWatch.Activities;
 using LoadWatch.Storage;
+using LoadWatch.Storage.Activities;
 using LoadWatch.Storage.Recordings;
 using NodaTime;
 
@@ -44,6 +45,28 @@ public sealed class SessionPlanning(StoreSession session, RecordingShelf shelf, 
         }
     }
 
+    /// <summary>How the activities of a group are stored now, by the key of the winner.</summary>
+    public IReadOnlyDictionary<string, StoredMerge> Stored(IReadOnlyList<RecordingSummary> group)
+    {
+        var keys = group.Select(one => one.Key).ToHashSet(StringComparer.Ordinal);
+        return session.Activities.Merges(group[0].Person, group.Min(one => one.Start), group.Max(one => one.Start))
+            .Where(one => keys.Contains(one.Winner.Key))
+            .ToDictionary(one => one.Winner.Key, StringComparer.Ordinal);
+    }
+
+    /// <summary>What a plan changes of what is stored. What gives and was just decoded is computed anew, as anything may have changed by which it is.</summary>
+    public SessionChange ChangeOf(SessionPlan plan, IReadOnlyDictionary<string, StoredMerge> stored)
+    {
+        if (!stored.TryGetValue(plan.Winner.Key, out var before)
+            || plan.Givers.Any(key => shelf.FreshOf(key) is not null)
+            || !plan.GivesAs(before.Frame, before.Contributions))
+        {
+            return SessionChange.Values;
+        }
+
+        return plan.IsAs(before.Frame, before.Contributions) ? SessionChange.None : SessionChange.Recordings;
+    }
+
     private Arrival? ArrivalOf(string sha) => session.Arrivals.Get(sha);
 
     private Dictionary<string, IReadOnlyList<string>> Replaced(IReadOnlyList<RecordingSummary> group) => group
@@ -52,4 +75,16 @@ public sealed class SessionPlanning(StoreSession session, RecordingShelf shelf, 
         .Select(sha => (sha, By: session.Sightings.Replaced(sha)))
         .Where(one => one.By is not null)
         .ToDictionary(one => one.sha, one => one.By!, StringComparer.Ordinal);
+}
+
+/// <summary>What a plan changes of a stored activity.</summary>
+public enum SessionChange
+{
+    None,
+
+    /// <summary>Only what becomes of recordings that give nothing: a copy came or went.</summary>
+    Recordings,
+
+    /// <summary>What counts.</summary>
+    Values,
 }

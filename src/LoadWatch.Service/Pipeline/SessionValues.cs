@@ -40,7 +40,8 @@ public sealed class SessionValues(ArrivalDecoder decoder, RecordingShelf shelf)
         try
         {
             var recordings = plan.Givers.ToDictionary(key => key, key => shelf.Find(key, arrivalOf)!, StringComparer.Ordinal);
-            return WithRemarks(plan, MergedSession.Of(plan, recordings) is { } merged ? decoder.Values(merged, plan.Winner.Person) : new ActivityValues());
+            var values = MergedSession.Of(plan, recordings) is { } merged ? decoder.Values(merged, plan.Winner.Person) : new ActivityValues();
+            return WithRemarks(plan, values with { Remarks = [.. MergedSession.Partial(plan, values), .. values.Remarks] });
         }
         catch (Exception e) when (ArrivalDecoder.IsDefect(e))
         {

@@ -20,6 +20,8 @@ public sealed class ActivityTable
 
     private const string InsertHistogram = "INSERT INTO histogram (activity, channel, bins) VALUES (@activity, @channel, @bins)";
 
+    private const string UpdateRecordings = "UPDATE activity SET recordings = @Recordings WHERE key = @Key";
+
     // Its histograms go with it.
     private const string Delete = "DELETE FROM activity WHERE key = @key";
 
@@ -51,6 +53,9 @@ public sealed class ActivityTable
         session.Execute(Insert, ActivityRow.From(activity));
         session.ExecuteEach(InsertHistogram, HistogramRows(activity));
     }
+
+    /// <summary>Notes what became of the recordings of an activity whose values stay. Nothing when there is none.</summary>
+    public void PutRecordings(StoredMerge merge) => session.Execute(UpdateRecordings, ActivityRow.From(new StoredActivity(merge, new ActivityValues())));
 
     /// <summary>Removes an activity; nothing when there is none.</summary>
     public void Remove(string key) => session.Execute(Delete, new { key });

@@ -32,6 +32,7 @@ public sealed class MergedSessionsTests : IDisposable
         var activity = Assert.Single(folder.Activities("anna"));
         Assert.Equal((7200, 120, 40 * 60 * 200 / 1000.0), (activity.GetProperty("elapsed_s").GetDouble(), activity.Value("minutes"), activity.Value("work")));
         Assert.Equal(["wins", "gives"], activity.GetProperty("recordings").EnumerateArray().OrderBy(one => one.GetProperty("file").GetString(), StringComparer.Ordinal).Select(one => one.GetProperty("role").GetString()));
+        Assert.Contains("power in 40 of 120 min: what is computed from it is of those", activity.Words("remarks"));
         Assert.Contains(": wins, gives heart rate until 40 min, power\n", Explained("anna/bike.fit"), StringComparison.Ordinal);
         Assert.Contains($"part 1 in the session {Nights.Day(0)}T12:00:00Z of anna: gives heart rate after 40 min\n", Explained("anna/watch.fit"), StringComparison.Ordinal);
         Assert.Contains($"recording 1 of anna/watch.fit ({WorkingFolder.Sha(Watch)[..12]}): gives heart rate after 40 min", ExplainedDay(), StringComparison.Ordinal);
@@ -48,6 +49,28 @@ public sealed class MergedSessionsTests : IDisposable
         Assert.Contains(": wins, all of it counts\n", Explained("anna/a.fit"), StringComparison.Ordinal);
         Assert.Matches(@": superseded by anna/a\.fit \([0-9a-f]{12}\): they overlap 30 of 30 min\n", Explained("anna/b.fit"));
         AssertSettled();
+    }
+
+    /// <summary>Its winner is not read again: that its original is gone makes no difference.</summary>
+    [Fact]
+    public void ALaterCopyLeavesTheValuesAlone()
+    {
+        folder.Put("anna/bike.fit", Bike);
+        folder.Put("anna/watch.fit", Watch);
+        folder.Sweep();
+        var before = folder.Activities("anna")[0].GetProperty("quantities").GetRawText();
+        foreach (var path in WorkingFolder.Files(Path.Combine(folder.Data, "archive")))
+        {
+            File.Delete(path);
+        }
+
+        folder.Put("anna/copy.fit", Device(4, 10, 30, heartRate: 139));
+        folder.Sweep();
+
+        var activity = Assert.Single(folder.Activities("anna"));
+        Assert.Equal(before, activity.GetProperty("quantities").GetRawText());
+        Assert.Equal(["gives", "superseded", "wins"], activity.GetProperty("recordings").EnumerateArray().Select(one => one.GetProperty("role").GetString()).Order(StringComparer.Ordinal));
+        Assert.Contains("superseded by anna/bike.fit", Explained("anna/copy.fit"), StringComparison.Ordinal);
     }
 
     /// <summary>Both have merged sessions, before and after.</summary>
@@ -86,6 +109,7 @@ public sealed class MergedSessionsTests : IDisposable
         folder.Sweep();
 
         Assert.Null(Assert.Single(folder.Activities("anna")).Value("work"));
+        Assert.Contains("seen as anna/ride.fit in inbox, where other bytes are by now\n", Explained(WorkingFolder.Sha(Bike)[..12]), StringComparison.Ordinal);
         Assert.Contains($": replaced under its name by anna/ride.fit ({WorkingFolder.Sha(corrected)[..12]})\n", Explained(WorkingFolder.Sha(Bike)[..12]), StringComparison.Ordinal);
         AssertSettled();
 
