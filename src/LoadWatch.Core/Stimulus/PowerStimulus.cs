@@ -5,8 +5,7 @@ namespace LoadWatch.Stimulus;
 /// <summary>Reads power second by second: relative drive from critical power, maximal power and the balance of W', then the pool.</summary>
 public static class PowerStimulus
 {
-    /// <param name="power">Usable readings in time order, W.</param>
-    public static EnduranceEstimate Of(IReadOnlyList<UsableSample> power, PowerCapacity capacity)
+    public static EnduranceEstimate Of(UsableChannel power, PowerCapacity capacity)
     {
         var low = Read(power, capacity, Variant.Low);
         var mid = Read(power, capacity, Variant.Mid);
@@ -22,34 +21,23 @@ public static class PowerStimulus
             capacity.NotSeen);
     }
 
-    /// <summary>The relative drive at each sample, 0 to 1.</summary>
-    public static double[] Drives(IReadOnlyList<UsableSample> power, PowerCapacity capacity, Variant variant)
+    private static (ClassFractions Seconds, int Bouts) Read(UsableChannel power, PowerCapacity capacity, Variant variant)
     {
-        var critical = variant.Capacity(capacity.Critical.Value, CapacityError.Of(capacity.Critical.Source));
-        double? maximum = capacity.Maximum is { } max ? variant.Capacity(max.Value, CapacityError.Of(max.Source)) : null;
-        double? wPrime = capacity.WPrime is { } anchor ? variant.Capacity(anchor.Value, CapacityError.WPrime) : null;
-        var balances = wPrime is { } full && maximum is not null ? WPrimeBalance.Of(power, critical, full) : null;
-        var drives = new double[power.Count];
-        for (var sample = 0; sample < drives.Length; sample++)
-        {
-            var balance = balances is null ? 1 : balances[sample] / wPrime!.Value;
-            drives[sample] = Drive.Of(power[sample].Value, critical, maximum, balance, variant.CriticalDrive);
-        }
-
-        return drives;
-    }
-
-    private static (ClassFractions Seconds, int Bouts) Read(IReadOnlyList<UsableSample> power, PowerCapacity capacity, Variant variant)
-    {
-        var drives = Drives(power, capacity, variant);
+        var times = power.UnixMilliseconds;
+        var values = power.Values;
+        var milliseconds = power.Milliseconds;
+        var drive = new PowerDrive(power, capacity, variant);
+        var known = new WholeWatts();
         var bouts = new HardBouts();
-        var seconds = default(ClassFractions);
-        for (var sample = 0; sample < drives.Length; sample++)
+        var sum = default(ClassFractions);
+        for (var at = 0; at < values.Length; at++)
         {
-            seconds += variant.Recruitment.At(drives[sample]) * power[sample].Seconds;
-            bouts.Add(power[sample].UnixMilliseconds, power[sample].Milliseconds, drives[sample]);
+            var seconds = milliseconds[at] / 1000.0;
+            var now = drive.Next(times[at], values[at], seconds);
+            sum += (drive.IsFresh(values[at]) ? known.At(values[at], now, variant.Recruitment) : variant.Recruitment.At(now)) * seconds;
+            bouts.Add(times[at], milliseconds[at], now);
         }
 
-        return (seconds, bouts.Count);
+        return (sum, bouts.Count);
     }
 }

@@ -41,9 +41,17 @@ internal sealed class SampleColumns
             Fill(plan.Developer, plan, payload, row, filled);
     }
 
+    /// <summary>Gives all memory back; the columns are empty then.</summary>
+    public void Return()
+    {
+        times.Return();
+        Array.ForEach(channels, channel => channel.Return());
+        Count = 0;
+    }
+
     private int Fill(ChannelSource[] sources, MessagePlan plan, ReadOnlySpan<byte> payload, int row, int filled)
     {
-        foreach (var source in sources)
+        foreach (ref readonly var source in sources.AsSpan())
         {
             if (!Filled(filled, source.Channel) && source.Read(payload, plan.BigEndian) is var value && double.IsFinite(value))
                 filled |= Set(source.Channel, row, value);
