@@ -53,9 +53,15 @@ public static class ChannelHistogram
     /// <summary>The floor in bins, after rounding to a thousandth of the unit, so that 5.3 m/s held as 5.2999999 stays in bin 53.</summary>
     public static int BinOf(Channel channel, double value) => BinOf(value, BinsPerUnit(channel));
 
-    /// <summary>Values lie within <see cref="ChannelLimits"/>, so nothing overflows.</summary>
+    /// <summary>Values lie within <see cref="ChannelLimits"/>, so nothing overflows. A whole one needs no rounding.</summary>
     private static int BinOf(double value, int perUnit)
     {
+        var whole = unchecked((int)value);
+        if (whole == value)
+        {
+            return whole * perUnit;
+        }
+
         var bins = unchecked((long)Math.Round(value * 1000)) * perUnit;
         return unchecked((int)(bins >= 0 ? bins / 1000 : (bins - 999) / 1000));
     }

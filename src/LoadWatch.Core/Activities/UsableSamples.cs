@@ -14,6 +14,9 @@ public static class UsableSamples
     /// <summary>The longest time that one reading may stand for, milliseconds. A choice: it bridges sparse recording, not a stop.</summary>
     public const int LongestMilliseconds = 10_000;
 
+    /// <summary>Milliseconds in seconds; mostly it is one.</summary>
+    internal static double Seconds(int milliseconds) => milliseconds == 1000 ? 1 : milliseconds / 1000.0;
+
     /// <summary>The channels with a reading, heart rate also where beats came only in messages of their own.</summary>
     public static IEnumerable<Channel> ChannelsOf(Recording recording) =>
         SampleSeries.EveryChannel.Where(channel =>

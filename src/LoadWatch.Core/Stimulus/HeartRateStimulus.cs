@@ -49,7 +49,7 @@ public static class HeartRateStimulus
                 recruited = variant.Recruitment.At(drive.Of(before, variant));
             }
 
-            seconds += recruited * (milliseconds[sample] / 1000.0);
+            seconds += recruited * UsableSamples.Seconds(milliseconds[sample]);
         }
 
         return seconds;

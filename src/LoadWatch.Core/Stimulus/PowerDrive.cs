@@ -7,27 +7,36 @@ public struct PowerDrive
 {
     private readonly double critical;
     private readonly double? maximum;
-    private readonly double? wPrime;
+    private readonly double wPrime;
     private readonly double criticalDrive;
+    private readonly bool seesFatigue;
     private WPrimeBalance balance;
+    private double left;
 
-    /// <param name="power">All readings of the session; they are asked for one after the other.</param>
+    /// <param name="power">All readings of the session; they are taken one after the other.</param>
     public PowerDrive(UsableChannel power, PowerCapacity capacity, Variant variant)
     {
         critical = variant.Capacity(capacity.Critical.Value, CapacityError.Of(capacity.Critical.Source));
         maximum = capacity.Maximum is { } max ? variant.Capacity(max.Value, CapacityError.Of(max.Source)) : null;
-        wPrime = capacity is { WPrime: { } anchor, Maximum: not null } ? variant.Capacity(anchor.Value, CapacityError.WPrime) : null;
         criticalDrive = variant.CriticalDrive;
-        balance = wPrime is { } full ? new WPrimeBalance(power, critical, full) : default;
+        seesFatigue = capacity is { WPrime: not null, Maximum: not null };
+        wPrime = seesFatigue ? variant.Capacity(capacity.WPrime!.Value, CapacityError.WPrime) : 1;
+        balance = seesFatigue ? new WPrimeBalance(power, critical, wPrime) : default;
+        left = wPrime;
+    }
+
+    /// <summary>Goes on to the next reading.</summary>
+    public void Advance(long unixMilliseconds, double watts, double seconds)
+    {
+        if (seesFatigue)
+        {
+            left = balance.Next(unixMilliseconds, watts, seconds);
+        }
     }
 
     /// <summary>True where the drive follows from the intensity alone, whatever was done before.</summary>
-    public readonly bool IsFresh(double watts) => watts <= critical || wPrime is null;
+    public readonly bool IsFresh(double watts) => watts <= critical || !seesFatigue;
 
-    /// <summary>The drive of the next reading, 0 to 1.</summary>
-    public double Next(long unixMilliseconds, double watts, double seconds)
-    {
-        var left = wPrime is { } full ? balance.Next(unixMilliseconds, watts, seconds) / full : 1;
-        return Drive.Of(watts, critical, maximum, left, criticalDrive);
-    }
+    /// <summary>The drive at an intensity at the time of the reading gone on to, 0 to 1.</summary>
+    public readonly double At(double watts) => Drive.Of(watts, critical, maximum, left / wPrime, criticalDrive);
 }

@@ -1,3 +1,4 @@
+using System.Buffers;
 using LoadWatch.Activities;
 
 namespace LoadWatch.Stimulus;
@@ -5,11 +6,27 @@ namespace LoadWatch.Stimulus;
 /// <summary>Reads power second by second: relative drive from critical power, maximal power and the balance of W', then the pool.</summary>
 public static class PowerStimulus
 {
+    /// <summary>Devices write whole watts and few different ones: up to here what they ask for is kept where it follows from them alone.</summary>
+    private const int KeptWatts = 512;
+
     public static EnduranceEstimate Of(UsableChannel power, PowerCapacity capacity)
     {
-        var low = Read(power, capacity, Variant.Low);
-        var mid = Read(power, capacity, Variant.Mid);
-        var high = Read(power, capacity, Variant.High);
+        var kept = ArrayPool<Reading>.Shared.Rent(KeptWatts);
+        try
+        {
+            return Of(power, capacity, kept);
+        }
+        finally
+        {
+            ArrayPool<Reading>.Shared.Return(kept);
+        }
+    }
+
+    private static EnduranceEstimate Of(UsableChannel power, PowerCapacity capacity, Span<Reading> kept)
+    {
+        var low = Read(power, capacity, Variant.Low, kept);
+        var mid = Read(power, capacity, Variant.Mid, kept);
+        var high = Read(power, capacity, Variant.High, kept);
         var trueMaximum = capacity.Maximum is not null;
         return new EnduranceEstimate(
             capacity.Grade,
@@ -21,23 +38,45 @@ public static class PowerStimulus
             capacity.NotSeen);
     }
 
-    private static (ClassFractions Seconds, int Bouts) Read(UsableChannel power, PowerCapacity capacity, Variant variant)
+    private static (ClassFractions Seconds, int Bouts) Read(UsableChannel power, PowerCapacity capacity, Variant variant, Span<Reading> kept)
     {
         var times = power.UnixMilliseconds;
         var values = power.Values;
         var milliseconds = power.Milliseconds;
         var drive = new PowerDrive(power, capacity, variant);
-        var known = new WholeWatts();
         var bouts = new HardBouts();
         var sum = default(ClassFractions);
+        kept.Clear();
         for (var at = 0; at < values.Length; at++)
         {
-            var seconds = milliseconds[at] / 1000.0;
-            var now = drive.Next(times[at], values[at], seconds);
-            sum += (drive.IsFresh(values[at]) ? known.At(values[at], now, variant.Recruitment) : variant.Recruitment.At(now)) * seconds;
-            bouts.Add(times[at], milliseconds[at], now);
+            var seconds = UsableSamples.Seconds(milliseconds[at]);
+            drive.Advance(times[at], values[at], seconds);
+            var reading = At(values[at], drive, variant.Recruitment, kept);
+            sum += reading.Recruited * seconds;
+            bouts.Add(times[at], milliseconds[at], reading.Drive);
         }
 
         return (sum, bouts.Count);
+    }
+
+    private static Reading At(double watts, in PowerDrive drive, Recruitment recruitment, Span<Reading> kept)
+    {
+        var whole = unchecked((int)watts);
+        if ((uint)whole >= (uint)kept.Length || whole != watts || !drive.IsFresh(watts))
+        {
+            return Reading.Of(drive.At(watts), recruitment);
+        }
+
+        if (!kept[whole].IsKnown)
+        {
+            kept[whole] = Reading.Of(drive.At(watts), recruitment);
+        }
+
+        return kept[whole];
+    }
+
+    private readonly record struct Reading(double Drive, ClassFractions Recruited, bool IsKnown)
+    {
+        public static Reading Of(double drive, Recruitment recruitment) => new(drive, recruitment.At(drive), IsKnown: true);
     }
 }

@@ -54,8 +54,9 @@ public struct WPrimeBalance
         {
             if (values[at] < criticalPowerWatts)
             {
-                sum += values[at] * (milliseconds[at] / 1000.0);
-                seconds += milliseconds[at] / 1000.0;
+                var apart = UsableSamples.Seconds(milliseconds[at]);
+                sum += values[at] * apart;
+                seconds += apart;
             }
         }
 

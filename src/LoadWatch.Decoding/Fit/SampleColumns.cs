@@ -41,6 +41,22 @@ internal sealed class SampleColumns
             Fill(plan.Developer, plan, payload, row, filled);
     }
 
+    /// <summary>Adds the rows of a run, each channel of which has one source.</summary>
+    public void Add(in RecordRun run)
+    {
+        for (var row = 0; row < run.Rows; row++)
+            times.Set(Count + row, run.Timestamp(row) is { } seconds ? seconds * 1000L : SampleSeries.Undated);
+
+        foreach (ref readonly var source in run.Sources)
+        {
+            var last = run.Read(source, channels[(int)source.Channel], Count);
+            if (source.Channel == Channel.Distance && double.IsFinite(last))
+                packed.Restart(last);
+        }
+
+        Count += run.Rows;
+    }
+
     /// <summary>Gives all memory back; the columns are empty then.</summary>
     public void Return()
     {

@@ -48,6 +48,13 @@ public class DriveTests
     private static List<double> Drives(UsableChannel power, PowerCapacity capacity)
     {
         var drive = new PowerDrive(power, capacity, Variant.Mid);
-        return [.. power.Samples.Select(sample => drive.Next(sample.UnixMilliseconds, sample.Value, sample.Milliseconds / 1000.0))];
+        var drives = new List<double>();
+        foreach (var sample in power.Samples)
+        {
+            drive.Advance(sample.UnixMilliseconds, sample.Value, sample.Milliseconds / 1000.0);
+            drives.Add(drive.At(sample.Value));
+        }
+
+        return drives;
     }
 }
