@@ -30,8 +30,8 @@ public sealed class ChannelExtents(IEnumerable<ChannelExtent> extents) : IEquata
     public static ChannelExtents Of(UsableRecording usable) => new(usable.Channels.Values.Select(channel => new ChannelExtent(
         channel.Channel,
         usable[channel.Channel] is not null,
-        channel.Samples.Count > 0 ? channel.Samples[0].UnixMilliseconds : null,
-        channel.Samples.Count > 0 ? channel.Samples[^1].UnixMilliseconds : null)));
+        channel.Count > 0 ? channel.UnixMilliseconds[0] : null,
+        channel.Count > 0 ? channel.UnixMilliseconds[^1] : null)));
 
     public bool Equals(ChannelExtents? other) => other is not null && all.AsSpan().SequenceEqual(other.all);
 
