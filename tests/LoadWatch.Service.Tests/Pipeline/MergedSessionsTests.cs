@@ -170,13 +170,13 @@ public sealed class MergedSessionsTests : IDisposable
         folder.Sweep();
         var original = WorkingFolder.Files(Path.Combine(folder.Data, "archive")).Single(path => Path.GetFileName(path) == WorkingFolder.Sha(Watch));
         File.WriteAllBytes(original, new byte[Watch.Length]);
-        folder.Put("anna/strap.fit", Device(3, 0, 60, heartRate: 141));
+        folder.Put("anna/strap.fit", Device(3, -30, 20, heartRate: 141));
         folder.Put("bo/ride.fit", Some.Fit(Some.Yesterday));
         folder.Sweep();
 
         var activity = Assert.Single(folder.Activities("anna"));
         Assert.Contains($"computed without session 1 of {WorkingFolder.Sha(Watch)[..12]}: its original in the archive is missing or damaged", activity.Words("remarks"));
-        Assert.Equal(3600, activity.GetProperty("elapsed_s").GetDouble());
+        Assert.Equal((30 + 40) * 60, activity.GetProperty("elapsed_s").GetDouble());
         Assert.Contains(": gives nothing: its original in the archive is missing or damaged\n", Explained("anna/watch.fit"), StringComparison.Ordinal);
         Assert.Single(folder.Activities("bo"));
     }
