@@ -17,6 +17,9 @@ internal sealed class ActivityRow : RecordingRow
 
     public string Recordings { get; init; } = "";
 
+    /// <summary>Null where it is as the winner says.</summary>
+    public string? Session { get; init; }
+
     public double? HeartRateMeanBpm { get; init; }
 
     public int? HeartRateMaxBpm { get; init; }
@@ -41,8 +44,9 @@ internal sealed class ActivityRow : RecordingRow
         Sha = activity.Winner.Sha,
         Part = activity.Winner.Part,
         Person = activity.Winner.Person,
-        Date = activity.Winner.Date,
-        Recordings = JsonText.Write(activity.RecordingKeys),
+        Date = activity.Date,
+        Recordings = JsonText.Write(activity.Merge.Contributions),
+        Session = activity.Merge.Frame == SessionFrame.Of(activity.Winner) ? null : JsonText.Write(activity.Merge.Frame),
         HeartRateMeanBpm = activity.Values.HeartRateMeanBpm,
         HeartRateMaxBpm = activity.Values.HeartRateMaxBpm,
         PowerMeanWatts = activity.Values.PowerMeanWatts,
@@ -68,6 +72,12 @@ internal sealed class ActivityRow : RecordingRow
             Quantities = JsonText.Read<List<Quantity>>(Quantities),
             Stimulus = JsonText.Read<List<RegionStimulus>>(Stimulus),
         };
-        return new StoredActivity(ToRecording(), values, JsonText.Read<List<string>>(Recordings));
+        return new StoredActivity(ToMerge(), values);
+    }
+
+    public StoredMerge ToMerge()
+    {
+        var winner = ToRecording();
+        return new StoredMerge(winner, Session is { } frame ? JsonText.Read<SessionFrame>(frame) : SessionFrame.Of(winner), JsonText.Read<List<Contribution>>(Recordings));
     }
 }
