@@ -7,6 +7,7 @@ using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 using Microsoft.Extensions.Hosting;
 using Microsoft.Extensions.Logging;
+using NodaTime;
 using Quartz;
 
 namespace LoadWatch.Service.Schedule;
@@ -17,39 +18,43 @@ public sealed class SweepJob(
     Workplace workplace,
     ConfigurationFile file,
     TimeProvider clock,
-    StatusFile status,
-    Heartbeat heartbeat,
+    Statuses statuses,
+    ServiceRecord state,
+    ClockGuard guard,
+    SweepHeartbeat heartbeat,
     ServiceEnd end,
     IHostApplicationLifetime lifetime,
     ILogger<SweepJob> log) : IJob
 {
+    /// <summary>A failed sweep is tried again in this time, also where the inboxes are looked into less often.</summary>
+    private static readonly TimeSpan Again = TimeSpan.FromSeconds(30);
+
     public ValueTask Execute(IJobExecutionContext context, CancellationToken cancellationToken = default)
     {
         try
         {
-            var fault = AdoptConfiguration();
             var now = MachineClock.Now(clock);
-            var sweep = workplace.NewSweep(now);
-            sweep.Report.Advanced = heartbeat.Beat;
-            sweep.Run(cancellationToken);
-            Log(sweep.Report);
-            status.Write(now, sweep.Report, fault);
+            if (guard.FaultAt(now) is { } fault)
+            {
+                WaitForTheClock(now, fault);
+            }
+            else
+            {
+                Sweep(now, cancellationToken);
+            }
         }
         catch (DurabilityLostException e)
         {
             LogMessages.DurabilityLost(log, e);
-            end.Fail(ExitCode.InputOutput);
-            lifetime.StopApplication();
-        }
-        catch (Exception e) when (!cancellationToken.IsCancellationRequested)
-        {
-            // The next scan tries again; the status file tells monitoring that this one failed.
-            LogMessages.SweepFailed(log, e);
-            status.WriteFailure(MachineClock.Now(clock), e);
+            Stop(ExitCode.InputOutput);
         }
         catch (OperationCanceledException) when (cancellationToken.IsCancellationRequested)
         {
             // The service stops between two commits; the next start goes on from there (I-4).
+        }
+        catch (Exception e)
+        {
+            Fail(e, context.Scheduler);
         }
         finally
         {
@@ -57,6 +62,72 @@ public sealed class SweepJob(
         }
 
         return ValueTask.CompletedTask;
+    }
+
+    private void Sweep(Instant now, CancellationToken cancel)
+    {
+        state.Began(now);
+        var fault = AdoptConfiguration();
+        var sweep = workplace.NewSweep(now);
+        sweep.Report.Advanced = heartbeat.Beat;
+        sweep.Run(cancel);
+        guard.Note(now);
+        if (state.Ended(MachineClock.Now(clock), sweep.Report, fault) is > 0 and var failures)
+        {
+            LogMessages.SweepsRecovered(log, failures);
+        }
+
+        SweepLog.Write(log, state, sweep.Report);
+        var status = statuses.Write(MachineClock.Now(clock));
+        workplace.Store.Write(session => new ServiceNotices(workplace.Configuration, now).Decide(session, status));
+    }
+
+    private void WaitForTheClock(Instant now, string fault)
+    {
+        if (state.ClockIsBehind(now, fault) == now)
+        {
+            LogMessages.ClockBehind(log, fault);
+        }
+
+        statuses.Write(now);
+    }
+
+    /// <summary>What may pass is tried again by the next sweep; damage does not pass, by a new start neither.</summary>
+    private void Fail(Exception e, IScheduler scheduler)
+    {
+        var failure = SweepFailure.Of(e);
+        var isNew = state.Failed(MachineClock.Now(clock), failure);
+        switch (failure.Trouble)
+        {
+            case StoreTrouble.Damaged:
+                LogMessages.DatabaseDamaged(log, e);
+                Stop(ExitCode.Data);
+                break;
+            case StoreTrouble.Busy when isNew:
+                LogMessages.DatabaseBusy(log);
+                break;
+            case not StoreTrouble.Busy when isNew:
+                LogMessages.SweepFailed(log, e);
+                break;
+        }
+
+        statuses.Write(MachineClock.Now(clock));
+        RetrySoon(scheduler);
+    }
+
+    private void RetrySoon(IScheduler scheduler)
+    {
+        if (workplace.Configuration.ScanEvery.ToTimeSpan() > 2 * Again && !lifetime.ApplicationStopping.IsCancellationRequested)
+        {
+            var trigger = TriggerBuilder.Create().ForJob(ServiceHost.SweepKey).StartAt(clock.GetUtcNow() + Again).Build();
+            _ = scheduler.ScheduleJob(trigger).AsTask();
+        }
+    }
+
+    private void Stop(int code)
+    {
+        end.Fail(code);
+        lifetime.StopApplication();
     }
 
     private string? AdoptConfiguration()
@@ -68,39 +139,12 @@ public sealed class SweepJob(
         }
         catch (ConfigurationException e)
         {
-            LogMessages.ConfigurationRefused(log, e.Faults.Count);
+            if (state.IsNewFault(e.Message))
+            {
+                LogMessages.ConfigurationRefused(log, e.Faults.Count);
+            }
+
             return e.Message;
-        }
-    }
-
-    private void Log(SweepReport report)
-    {
-        var settled = report.Settled.Values.Sum();
-        if (settled + report.AlertChanges + report.NoticesDecided > 0)
-        {
-            LogMessages.SweepDone(
-                log,
-                report.CountOf(ArrivalState.Stored),
-                report.CountOf(ArrivalState.Aside),
-                report.CountOf(ArrivalState.Held),
-                report.CountOf(ArrivalState.Refused),
-                report.AlertChanges,
-                report.NoticesDecided);
-        }
-
-        foreach (var inbox in report.MissingInboxes)
-        {
-            LogMessages.InboxMissing(log, OneLine.Of(inbox));
-        }
-
-        foreach (var undelivered in report.Undelivered)
-        {
-            LogMessages.DeliveryFailed(log, OneLine.Of(undelivered));
-        }
-
-        foreach (var given in report.GivenUp)
-        {
-            LogMessages.DeliveryGivenUp(log, OneLine.Of(given));
         }
     }
 }

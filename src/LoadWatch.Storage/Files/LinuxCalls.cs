@@ -33,6 +33,9 @@ internal static partial class LinuxCalls
     [LibraryImport("libc", EntryPoint = "statx", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
     public static partial int Stat(int folder, string path, int flags, uint mask, out FileStatus status);
 
+    [LibraryImport("libc", EntryPoint = "statfs", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
+    public static partial int FileSystem(string path, out FileSystemStatus status);
+
     [LibraryImport("libc", EntryPoint = "renameat2", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
     public static partial int Rename(int fromFolder, string from, int toFolder, string to, uint flags);
 
@@ -81,16 +84,28 @@ internal struct FileStatus
     public readonly FileStamp Stamp => new((long)Size, (ModifiedSeconds * 1000) + (ModifiedNanoseconds / 1_000_000), Id);
 }
 
+/// <summary>The beginning of <c>struct statfs</c>, with more room than any architecture needs.</summary>
+[StructLayout(LayoutKind.Sequential, Size = 512)]
+internal struct FileSystemStatus
+{
+    public nint Type;
+}
+
 /// <summary>The numbers of errno that decide something; the same on every Linux architecture.</summary>
 internal static class Errno
 {
     public const int NotPermitted = 1;
     public const int NoEntry = 2;
+    public const int Interrupted = 4;
     public const int NoDevice = 6;
     public const int AccessDenied = 13;
     public const int Exists = 17;
     public const int NotAFolder = 20;
     public const int Invalid = 22;
+    public const int NoSpace = 28;
+    public const int ReadOnly = 30;
     public const int NoSystemCall = 38;
     public const int Loop = 40;
+    public const int NotSupported = 95;
+    public const int NoQuota = 122;
 }
