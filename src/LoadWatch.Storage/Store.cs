@@ -114,6 +114,13 @@ public sealed class Store : IDisposable
         return dialect.Check(reader);
     }
 
+    /// <summary>Copies the database of this moment, to be opened on its own.</summary>
+    public void CopyTo(DataFolder other)
+    {
+        using var reader = dialect.OpenReader();
+        dialect.CopyTo(reader, other.DatabasePath);
+    }
+
     public void Dispose()
     {
         while (idleReaders.TryTake(out var reader))

@@ -69,6 +69,7 @@ public static class CommandLine
         InspectCommand.Create(),
         ExportCommand.Create(),
         RebuildCommand.Create(),
+        VerifyCommand.Create(),
         StatusCommand.Create(),
         MailTestCommand.Create(),
     };

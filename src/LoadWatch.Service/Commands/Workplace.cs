@@ -84,7 +84,7 @@ public sealed class Workplace : IDisposable
     /// <summary>The next sweep. After one that did not get as far as the pages, also in an earlier process, it writes them all anew.</summary>
     public Sweep NewSweep(Instant now)
     {
-        var sweep = new Sweep(Configuration, Folder, Store, now, new ChildProcessProbe(configPath)) 
+        var sweep = new Sweep(Configuration, Folder, Store, now, new ChildProcessProbe(configPath))
         {
             PagesAreCurrent = last is { PagesAreWritten: true },
             Looks = Looks,
@@ -92,6 +92,9 @@ public sealed class Workplace : IDisposable
         last = sweep;
         return sweep;
     }
+
+    /// <summary>A sweep whose rows go into another store, over the same archive.</summary>
+    public Sweep NewSweepOn(Store store, Instant now) => new(Configuration, Folder, store, now, new ChildProcessProbe(configPath));
 
     public void Dispose()
     {

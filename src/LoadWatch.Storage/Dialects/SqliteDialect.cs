@@ -85,6 +85,15 @@ public sealed class SqliteDialect : Dialect
 
     public override bool Checkpoint(DbConnection connection) => connection.ExecuteScalar<long>("PRAGMA wal_checkpoint(TRUNCATE)") == 0;
 
+    public override void CopyTo(DbConnection connection, string path)
+    {
+        // Made here with its mode; the engine takes an empty file for a new database.
+        PrivateFiles.OpenOrCreate(path, FileShare.None).Dispose();
+        using var copy = new SqliteConnection(new SqliteConnectionStringBuilder { DataSource = path, Mode = SqliteOpenMode.ReadWrite, Pooling = false }.ConnectionString);
+        copy.Open();
+        ((SqliteConnection)connection).BackupDatabase(copy);
+    }
+
     public override IReadOnlyList<string> Check(DbConnection connection)
     {
         try
