@@ -39,6 +39,7 @@ public static class ServiceHost
         builder.Services.AddSingleton(workplace);
         builder.Services.AddSingleton(new ConfigurationFile(configPath));
         builder.Services.AddSingleton<Statuses>();
+        builder.Services.AddSingleton<SupervisedSweep>();
         builder.Services.AddQuartz(quartz => Schedule(quartz, workplace));
         builder.Services.AddQuartzHostedService(options => options.WaitForJobsToComplete = true);
         builder.Services.AddHostedService<InboxWatcher>();

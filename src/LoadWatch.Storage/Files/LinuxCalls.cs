@@ -15,6 +15,9 @@ internal static partial class LinuxCalls
     /// <summary>Type, mode, size, times, inode: STATX_BASIC_STATS.</summary>
     public const uint BasicStats = 0x7ff;
 
+    /// <summary>These, and the time of birth: STATX_BASIC_STATS and STATX_BTIME.</summary>
+    public const uint StatsWithBirth = 0xfff;
+
     // The two flags differ between the generic and the ARM ABI.
     public static readonly int OnlyFolder = OnArm ? 0x4000 : 0x10000;
     public static readonly int NoFollow = OnArm ? 0x8000 : 0x20000;
@@ -53,6 +56,10 @@ internal struct FileStatus
     private const int TypeMask = 0xF000;
     private const int RegularType = 0x8000;
     private const int FolderType = 0x4000;
+    private const uint Born = 0x800;
+
+    [FieldOffset(0)]
+    public uint Mask;
 
     [FieldOffset(28)]
     public ushort Mode;
@@ -62,6 +69,12 @@ internal struct FileStatus
 
     [FieldOffset(40)]
     public ulong Size;
+
+    [FieldOffset(80)]
+    public long BornSeconds;
+
+    [FieldOffset(88)]
+    public uint BornNanoseconds;
 
     [FieldOffset(112)]
     public long ModifiedSeconds;
@@ -80,6 +93,9 @@ internal struct FileStatus
     public readonly bool IsFolder => (Mode & TypeMask) == FolderType;
 
     public readonly string Id => FormattableString.Invariant($"{DeviceMajor}.{DeviceMinor}:{Inode}");
+
+    /// <summary>With the time of birth, where the file system keeps it: the number of a deleted folder is soon given to the next.</summary>
+    public readonly string IdWithBirth => (Mask & Born) == 0 ? Id : FormattableString.Invariant($"{Id}@{BornSeconds}.{BornNanoseconds:D9}");
 
     public readonly FileStamp Stamp => new((long)Size, (ModifiedSeconds * 1000) + (ModifiedNanoseconds / 1_000_000), Id);
 }

@@ -32,11 +32,11 @@ public static class SafeFile
             return Directory.Exists(path) ? CreationText(Directory.GetCreationTimeUtc(path)) : null;
         }
 
-        return StatusOf(path, follow: true) is { IsFolder: true } status ? status.Id : null;
+        return LinuxCalls.Stat(LinuxCalls.CurrentFolder, path, 0, LinuxCalls.StatsWithBirth, out var status) == 0 && status.IsFolder ? status.IdWithBirth : null;
     }
 
-    private static FileStatus? StatusOf(string path, bool follow = false) =>
-        LinuxCalls.Stat(LinuxCalls.CurrentFolder, path, follow ? 0 : LinuxCalls.NoFollowAt, LinuxCalls.BasicStats, out var status) == 0 ? status : null;
+    private static FileStatus? StatusOf(string path) =>
+        LinuxCalls.Stat(LinuxCalls.CurrentFolder, path, LinuxCalls.NoFollowAt, LinuxCalls.BasicStats, out var status) == 0 ? status : null;
 
     // Opening a pipe would wait for a writer: non-blocking, and asked what it is before anything is read.
     private static FileOpening OpenOnLinux(string path)
