@@ -43,7 +43,7 @@ internal sealed class ChannelGifts
         .Select(given => (given.Key, new Gift(channel, null, [.. given.OrderBy(one => one.From is not null).ThenBy(one => one.From).SelectMany(one => one.Without(claimed(given.Key)))])))
         .Where(given => given.Item2.Stretches.Count > 0);
 
-    private ChannelExtent? Extent(RecordingSummary recording) => recording.Channels[channel];
+    private ChannelExtent? Extent(RecordingSummary recording) => recording.Extent(channel);
 
     private void Begin(RecordingSummary richest)
     {

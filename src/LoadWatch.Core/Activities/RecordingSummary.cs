@@ -39,12 +39,28 @@ public sealed record RecordingSummary(
     /// <summary>The local date that the session counts for.</summary>
     public LocalDate Date => Start.WithOffset(LocalOffset).Date;
 
-    /// <summary>After the elapsed time, or with the last usable reading where that is later; without either the start itself.</summary>
-    public Instant End => Start + Duration.Max(Duration.Zero, Duration.Min(Longest, Duration.Max(Stated, Read)));
+    /// <summary>After the elapsed time; where that is unknown with the last usable reading, and without one the start itself.</summary>
+    public Instant End => Start + Duration.Max(Duration.Zero, Duration.Min(Longest, Length));
 
-    private Duration Stated => ElapsedSeconds is { } seconds && double.IsFinite(seconds)
-        ? Duration.FromMilliseconds(Math.Clamp(Math.Round(seconds * 1000), 0, Longest.TotalMilliseconds))
-        : Duration.Zero;
+    private Duration Length => (ElapsedSeconds, Channels.Last) switch
+    {
+        ({ } seconds and > 0, _) when double.IsFinite(seconds) => Duration.FromMilliseconds(Math.Min(Math.Round(seconds * 1000), Longest.TotalMilliseconds)),
+        (_, { } last) => Instant.FromUnixTimeMilliseconds(last) - Start,
+        _ => Duration.Zero,
+    };
 
-    private Duration Read => Channels.Last is { } last ? Instant.FromUnixTimeMilliseconds(last) - Start : Duration.Zero;
+    /// <summary>
+    /// From when to when a channel has usable readings while the recording ran: a reading with a stray time makes no session of years. Not usable where all
+    /// of them lie outside; null where there is no reading.
+    /// </summary>
+    public ChannelExtent? Extent(Channel channel)
+    {
+        if (Channels[channel] is not { First: { } first, Last: { } last } extent)
+        {
+            return Channels[channel];
+        }
+
+        var (from, to) = (Math.Max(first, Start.ToUnixTimeMilliseconds()), Math.Min(last, End.ToUnixTimeMilliseconds()));
+        return from <= to ? extent with { First = from, Last = to } : extent with { IsUsable = false, First = null, Last = null };
+    }
 }

@@ -34,5 +34,5 @@ internal sealed class SessionClaims(IReadOnlyList<SessionGroup> groups, Func<Ses
         [.. recordings.Select(Ran).Where(stretch => stretch.From < stretch.To && stretch.Within(Ran(of)) is not null)];
 
     private bool Has(SessionGroup group, Channel? channel) =>
-        channel is null || group.Recordings.Any(recording => mayGive(group, recording) && recording.Channels[channel.Value] is { IsUsable: true });
+        channel is null || group.Recordings.Any(recording => mayGive(group, recording) && recording.Extent(channel.Value) is { IsUsable: true });
 }

@@ -47,7 +47,7 @@ internal sealed class SessionMerging(
 
     private IEnumerable<(RecordingSummary Recording, Gift Gift)> LevelGift(Channel channel, SessionSpan span)
     {
-        var giver = OfWholeSession(one => one.Channels[channel] is { IsUsable: true }, span, one => new Stretch(one.Channels[channel]!.First, one.Channels[channel]!.Last + 1))
+        var giver = OfWholeSession(one => one.Extent(channel) is { IsUsable: true }, span, one => new Stretch(one.Extent(channel)!.First, one.Extent(channel)!.Last + 1))
             ?? (able.Contains(group.Winner) && group.Winner.Channels[channel] is not null ? group.Winner : null);
         return giver is null ? [] : [(giver, new Gift(channel, null, Stretch.Always.Without(claimed(giver, channel))))];
     }

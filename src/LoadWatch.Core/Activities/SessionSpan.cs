@@ -49,7 +49,7 @@ internal sealed class SessionSpan
     /// <summary>From the first to the last usable reading that counts.</summary>
     private static IEnumerable<Stretch> Given((RecordingSummary Recording, Gift Gift) given)
     {
-        var extent = given.Recording.Channels[given.Gift.Channel!.Value]!;
+        var extent = given.Recording.Extent(given.Gift.Channel!.Value)!;
         return given.Gift.Stretches.Select(stretch => stretch.Within(new Stretch(extent.First, extent.Last))).OfType<Stretch>();
     }
 }

@@ -25,32 +25,36 @@ public static class UsableSamples
     public static UsableChannel Of(Recording recording, Channel channel) => Of(recording, channel, SampleTimeline.Of(recording.Samples.Times));
 
     /// <summary>The same where the time line of the recording's samples is known.</summary>
-    internal static UsableChannel Of(Recording recording, Channel channel, SampleTimeline timeline) =>
-        RowsOf(recording, channel, timeline) is var (line, values)
-            ? Of(channel, recording.Sport, line, values)
-            : new UsableChannel(channel, [], [], [], 0, share: 0);
-
-    /// <summary>The rows that count for a channel within a stretch, in time order; a row without a reading is NaN.</summary>
-    internal static IEnumerable<(long UnixMilliseconds, double Value)> Rows(Recording recording, Channel channel, Stretch within)
+    internal static UsableChannel Of(Recording recording, Channel channel, SampleTimeline timeline)
     {
-        var (line, values) = RowsOf(recording, channel, SampleTimeline.Of(recording.Samples.Times)) ?? (SampleTimeline.Of([]), []);
-        return line.Times.Zip(values).Where(row => within.Holds(row.First));
-    }
-
-    /// <summary>Null where the recording has no column for the channel.</summary>
-    private static (SampleTimeline Line, double[] Values)? RowsOf(Recording recording, Channel channel, SampleTimeline ofSamples)
-    {
-        var series = recording.SeriesOf(channel);
-        if (channel == Channel.HeartRate && recording.LateHeartRates.Count > 0)
+        if (recording.Gathered.TryGetValue(channel, out var gathered))
         {
-            var (times, values) = LateBeatRows.With(series, recording.LateHeartRates);
-            var withBeats = SampleTimeline.Of(times);
-            return (withBeats, withBeats.Ordered(values));
+            return Of(channel, recording.Sport, gathered, SampleTimeline.Of(gathered.Times));
         }
 
-        var line = series == recording.Samples ? ofSamples : SampleTimeline.Of(series.Times);
-        return series.Column(channel) is { } column ? (line, line.Ordered(column)) : null;
+        if (channel == Channel.HeartRate && recording.LateHeartRates.Count > 0)
+        {
+            var (times, values) = LateBeatRows.With(recording.Samples, recording.LateHeartRates);
+            var withBeats = SampleTimeline.Of(times);
+            return Of(channel, recording.Sport, withBeats, withBeats.Ordered(values));
+        }
+
+        return Of(channel, recording.Sport, recording.Samples, timeline);
     }
+
+    /// <summary>The rows of what a file tells that count for a channel within a stretch, in time order; a row without a reading is NaN.</summary>
+    internal static IEnumerable<(long UnixMilliseconds, double Value)> Rows(Recording recording, Channel channel, Stretch within)
+    {
+        var (times, values) = channel == Channel.HeartRate && recording.LateHeartRates.Count > 0
+            ? LateBeatRows.With(recording.Samples, recording.LateHeartRates)
+            : (recording.Samples.Times, recording.Samples.Column(channel) ?? []);
+        var timeline = values.Length == 0 ? SampleTimeline.Of([]) : SampleTimeline.Of(times);
+        return timeline.Times.Zip(timeline.Ordered(values)).Where(row => within.Holds(row.First));
+    }
+
+    private static UsableChannel Of(Channel channel, Sport sport, SampleSeries samples, SampleTimeline timeline) => samples.Column(channel) is { } column
+        ? Of(channel, sport, timeline, timeline.Ordered(column))
+        : new UsableChannel(channel, [], [], [], 0, share: 0);
 
     private static UsableChannel Of(Channel channel, Sport sport, SampleTimeline timeline, double[] values)
     {

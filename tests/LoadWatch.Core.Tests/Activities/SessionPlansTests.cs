@@ -270,6 +270,21 @@ public class SessionPlansTests
     }
 
     [Fact]
+    public void AReadingWithAStrayTimeMakesNoSessionOfYears()
+    {
+        // One row of the watch is dated 30 years before, one a year later.
+        var watch = Worn.Of("watch", 0, 120, Watch).Recording;
+        long[] times = [.. watch.Samples.UnixMilliseconds];
+        (times[0], times[^1]) = (Worn.At(-30 * 525_600).ToUnixTimeMilliseconds(), Worn.At(525_600).ToUnixTimeMilliseconds());
+        var strayed = watch with { Samples = new SampleSeries(times, watch.Samples.Channels.ToDictionary(channel => channel, channel => watch.Samples[channel].ToArray())) };
+        Worn[] worn = [Worn.Of("bike", 0, 40, Bike), Worn.Of("watch", strayed), Worn.Of("next", 1440, 1500, Bike)];
+
+        var plans = Worn.Plans(worn);
+
+        Assert.Equal([("bike/1", 7200.0), ("next/1", 3600.0)], plans.Select(plan => (plan.Winner.Key, plan.Frame.ElapsedSeconds!.Value)));
+    }
+
+    [Fact]
     public void TotalsAreTakenFromOneDevice()
     {
         // The bike's running total ends at 19.2 km, the watch's own at 57.6: in one column they would tell of a jump.
