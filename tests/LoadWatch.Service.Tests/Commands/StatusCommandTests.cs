@@ -45,7 +45,7 @@ public sealed class StatusCommandTests : IDisposable
     public void AnInboxThatIsGoneIsCritical()
     {
         Directory.Delete(folder.Inbox, recursive: true);
-        Sweep();
+        Assert.Equal(0, Loadwatch.Run("sweep", "--config", folder.ConfigPath).Code);
         Assert.Equal((2, "CRITICAL: The inbox \"inbox\" is not available: there is no such folder."), Status());
     }
 
