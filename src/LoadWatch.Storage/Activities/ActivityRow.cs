@@ -15,7 +15,7 @@ internal sealed class ActivityRow : RecordingRow
 
     public LocalDate Date { get; init; }
 
-    public string Recordings { get; init; } = "";
+    public string Recordings { get; set; } = "";
 
     /// <summary>Null where it is as the winner says.</summary>
     public string? Session { get; init; }
@@ -38,6 +38,9 @@ internal sealed class ActivityRow : RecordingRow
 
     public string Stimulus { get; init; } = "";
 
+    /// <summary>Null for a row of before checksums were kept.</summary>
+    public string? Checksum { get; set; }
+
     public static ActivityRow From(StoredActivity activity) => new()
     {
         Key = activity.Key,
@@ -45,7 +48,7 @@ internal sealed class ActivityRow : RecordingRow
         Part = activity.Winner.Part,
         Person = activity.Winner.Person,
         Date = activity.Date,
-        Recordings = JsonText.Write(activity.Merge.Contributions),
+        Recordings = Text(activity.Merge.Contributions),
         Session = activity.Merge.Frame == SessionFrame.Of(activity.Winner) ? null : JsonText.Write(activity.Merge.Frame),
         HeartRateMeanBpm = activity.Values.HeartRateMeanBpm,
         HeartRateMaxBpm = activity.Values.HeartRateMaxBpm,
@@ -57,6 +60,9 @@ internal sealed class ActivityRow : RecordingRow
         Quantities = JsonText.Write(activity.Values.Quantities),
         Stimulus = JsonText.Write(activity.Values.Stimulus),
     };
+
+    /// <summary>As <see cref="Recordings"/> holds them.</summary>
+    public static string Text(IReadOnlyList<Contribution> contributions) => JsonText.Write(contributions);
 
     public StoredActivity ToActivity()
     {

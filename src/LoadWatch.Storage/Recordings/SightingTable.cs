@@ -35,6 +35,13 @@ public sealed class SightingTable
         WHERE s.inbox = @inbox AND s.path = @path AND a.state = 'stored'
         """;
 
+    private const string SelectNewest = "SELECT first_seen FROM sighting ORDER BY first_seen DESC LIMIT 1";
+
+    private const string SelectOldestWaiting = """
+        SELECT s.first_seen FROM arrival a JOIN sighting s ON s.sha = a.object_sha
+        WHERE a.state = 'waiting' ORDER BY s.first_seen LIMIT 1
+        """;
+
     private readonly StoreSession session;
 
     internal SightingTable(StoreSession session) => this.session = session;
@@ -90,6 +97,17 @@ public sealed class SightingTable
         .ThenByDescending(sighting => sighting.Since)
         .ThenByDescending(sighting => sighting.Sha, StringComparer.Ordinal)
         .FirstOrDefault()?.Sha;
+
+    /// <summary>When a name was last seen with a content that was new there; null where nothing ever came.</summary>
+    public Instant? Newest() => session.Row<MomentRow>(SelectNewest)?.FirstSeen;
+
+    /// <summary>When the arrival came that has been waiting longest; null where none waits.</summary>
+    public Instant? OldestWaiting() => session.Row<MomentRow>(SelectOldestWaiting)?.FirstSeen;
+
+    private sealed class MomentRow
+    {
+        public Instant FirstSeen { get; init; }
+    }
 
     private sealed class Row
     {
