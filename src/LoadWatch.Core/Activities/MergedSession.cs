@@ -58,7 +58,12 @@ public static class MergedSession
         foreach (var (recording, stretch) in given.OrderBy(one => one.Stretch.From is not null).ThenBy(one => one.Stretch.From))
         {
             var next = UsableSamples.Rows(recording, channel, stretch).ToList();
-            if (stretch.From > end && next.Count > 0)
+            if (next.Count == 0)
+            {
+                continue;
+            }
+
+            if (stretch.From > end)
             {
                 rows.RemoveAll(row => StandsBeyond(row.UnixMilliseconds, end.Value));
             }

@@ -20,7 +20,7 @@ internal sealed class SessionMerging(
     public SessionPlan Plan()
     {
         var rates = Rates.SelectMany(RateGifts).ToList();
-        var span = new SessionSpan(group.Winner, claimed(group.Winner, null), rates);
+        var span = new SessionSpan(group.Winner, one => claimed(one, null), rates);
         var sport = able.FirstOrDefault(one => one.Sport.Name != Sport.Generic.Name);
         var distance = OfWholeSession(one => one.DistanceMetres is > 0, span, SessionClaims.Ran);
         var sets = SetGivers();

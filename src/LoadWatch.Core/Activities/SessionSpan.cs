@@ -11,14 +11,15 @@ internal sealed class SessionSpan
     private readonly IReadOnlyList<Stretch> own;
     private readonly IReadOnlyList<Stretch> all;
 
-    /// <param name="claimed">Of the winner: what belongs to richer activities.</param>
+    /// <param name="claimed">The time of a recording that belongs to other activities: of two that take different channels from it, one is longer by it.</param>
     /// <param name="gifts">Readings that were given.</param>
-    public SessionSpan(RecordingSummary winner, IReadOnlyList<Stretch> claimed, IReadOnlyList<(RecordingSummary Recording, Gift Gift)> gifts)
+    public SessionSpan(
+        RecordingSummary winner, Func<RecordingSummary, IReadOnlyList<Stretch>> claimed, IReadOnlyList<(RecordingSummary Recording, Gift Gift)> gifts)
     {
         this.winner = winner;
         var ran = SessionClaims.Ran(winner);
-        own = ran.Without(claimed) is { Count: > 0 } left && ran.From < ran.To ? left : [ran];
-        all = own.Concat(gifts.Where(given => given.Recording != winner).SelectMany(Given)).Joined();
+        own = ran.Without(claimed(winner)) is { Count: > 0 } left && ran.From < ran.To ? left : [ran];
+        all = own.Concat(gifts.Where(given => given.Recording != winner).SelectMany(given => Given(given).SelectMany(one => one.Without(claimed(given.Recording))))).Joined();
     }
 
     /// <summary>Whether a part of it belongs to a richer activity.</summary>

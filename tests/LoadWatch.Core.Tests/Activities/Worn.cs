@@ -53,6 +53,9 @@ internal sealed record Worn(RecordingSummary Summary, Recording Recording)
     public static double Minutes(SessionPlan plan, Channel channel, IEnumerable<Worn> worn) =>
         Merged(plan, worn)[channel] is { } usable ? usable.Samples.Sum(sample => sample.Milliseconds) / 60_000.0 : 0;
 
+    public override string ToString() =>
+        $"{Key} {(Summary.Start - Given.Start).TotalMinutes} to {(Summary.End - Given.Start).TotalMinutes} min: {string.Join(' ', Recording.Samples.Channels)}, {Summary.Sets} sets";
+
     /// <summary>What a plan says, in a line.</summary>
     public static string Text(SessionPlan plan) => $"{plan.Frame} " + string.Join(" + ", plan.Contributions.Select(one =>
         $"{one.Key} {one.Role} [{(one.Gifts is null ? "all" : string.Join(", ", one.Gifts.Select(gift => $"{gift.Channel}{gift.Whole} {string.Join(' ', gift.Stretches)}")))}]"));
