@@ -12,6 +12,7 @@ public sealed class Store : IDisposable
     private readonly Lock writing = new();
     private readonly ConcurrentBag<DbConnection> idleReaders = [];
     private DbException? lost;
+    private long rowsRead;
 
     private Store(Dialect dialect)
     {
@@ -27,6 +28,9 @@ public sealed class Store : IDisposable
         sqlite.Prepare();
         return new Store(sqlite);
     }
+
+    /// <summary>Rows that sessions of this store have read so far: what a piece of work costs, whatever else the machine does.</summary>
+    public long RowsRead => Interlocked.Read(ref rowsRead);
 
     /// <summary>Runs the work in one transaction: all of it is durable when this returns, none of it when it throws (I-4).</summary>
     /// <exception cref="DurabilityLostException">The disk failed to keep what it was given; the store writes no more.</exception>
@@ -47,7 +51,7 @@ public sealed class Store : IDisposable
             try
             {
                 using var transaction = dialect.BeginWrite(writer);
-                var result = work(new StoreSession(dialect, transaction));
+                var result = work(new StoreSession(dialect, transaction, CountRows));
                 transaction.Commit();
                 return result;
             }
@@ -66,7 +70,7 @@ public sealed class Store : IDisposable
         try
         {
             using var transaction = dialect.BeginRead(reader);
-            return work(new StoreSession(dialect, transaction));
+            return work(new StoreSession(dialect, transaction, CountRows));
         }
         finally
         {
@@ -102,6 +106,8 @@ public sealed class Store : IDisposable
 
         writer.Dispose();
     }
+
+    private void CountRows(int rows) => Interlocked.Add(ref rowsRead, rows);
 
     // After one failed sync the next may claim success over pages that the system has dropped: only a restart and a check tell.
     private void RefuseAfterLoss()

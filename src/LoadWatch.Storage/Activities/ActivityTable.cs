@@ -31,6 +31,7 @@ public sealed class ActivityTable
 
     private const string InDates = " WHERE a.date >= @from AND a.date <= @to";
     private const string OfPersonInDates = InDates + " AND a.person = @person";
+    private const string SelectFirst = "SELECT MIN(date) AS date FROM activity WHERE person = @person";
     private const string SelectHistogram = "SELECT bins FROM histogram WHERE activity = @key AND channel = @channel";
 
     private readonly StoreSession session;
@@ -56,6 +57,9 @@ public sealed class ActivityTable
     public IReadOnlyList<StoredActivity> All(LocalDate? from = null, LocalDate? to = null) =>
         Select(InDates, new { from = from ?? LocalDate.MinIsoValue, to = to ?? LocalDate.MaxIsoValue });
 
+    /// <summary>The first date of a person's activities, or null.</summary>
+    public LocalDate? FirstOfPerson(string person) => session.Row<FirstRow>(SelectFirst, new { person })?.Date;
+
     /// <summary>Time by value of one channel, or null where the activity has none.</summary>
     public Histogram? Histogram(string key, Channel channel) =>
         session.Value<byte[]>(SelectHistogram, new { key, channel = Words<Channel>.Of(channel) }) is { } bins ? HistogramCodec.Read(bins) : null;
@@ -64,6 +68,11 @@ public sealed class ActivityTable
         activity.Values.Histograms
             .OrderBy(pair => pair.Key)
             .Select(pair => new { activity = activity.Key, channel = Words<Channel>.Of(pair.Key), bins = HistogramCodec.Write(pair.Value) });
+
+    private sealed class FirstRow
+    {
+        public LocalDate? Date { get; init; }
+    }
 
     private List<StoredActivity> Select(string where, object values) =>
         session.Rows<ActivityRow>(SelectActivities + where + " ORDER BY a.date, r.start, a.key", values).ConvertAll(row => row.ToActivity());
