@@ -58,7 +58,7 @@ public sealed class Sweep
     public SweepReport Run(CancellationToken cancel = default)
     {
         AdoptConfiguration(cancel);
-        decoder.Basis = store.Read(session => TableBasis.Of(configuration, session));
+        decoder.Basis = TableBasis.Of(configuration, store);
         recovery.Run(cancel);
         Inboxes.MakePersonFolders(configuration);
         InboxRemoval.PutBack(configuration);
@@ -111,7 +111,7 @@ public sealed class Sweep
     private void TakeUpTables(CancellationToken cancel)
     {
         tables.TakeUp(cancel);
-        decoder.Basis = store.Read(session => TableBasis.Of(configuration, session));
+        decoder.Basis = TableBasis.Of(configuration, store);
         recomputations.Run(cancel);
     }
 
