@@ -118,7 +118,7 @@ internal sealed class DayRow
         DaysSinceRecorded = DaysSinceRecorded,
         Plan = Plan == NoPlan ? DayPlan.None : JsonText.Read<DayPlan>(Plan),
         Regions = JsonText.Read<Dictionary<BodyRegion, RegionDay>>(Regions),
-        Sessions = Sessions is "" or NoSessions ? [] : JsonText.Read<List<DaySession>>(Sessions),
+        Sessions = Sessions is "" or NoSessions ? Array.Empty<DaySession>() : JsonText.Read<List<DaySession>>(Sessions),
         Carried = Carried.Length == 0 ? LoadWatch.Days.Carried.Nothing : LoadWatch.Days.Carried.Read(Carried),
     };
 }

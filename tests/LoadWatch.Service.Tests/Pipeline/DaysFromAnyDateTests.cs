@@ -40,6 +40,21 @@ public sealed class DaysFromAnyDateTests
         }
     }, iter: Histories);
 
+    /// <summary>Else the properties below would say little.</summary>
+    [Fact]
+    public void TheHistoriesHoldFindingsOfEveryRule()
+    {
+        var last = RandomHistory.First.PlusDays(RandomHistory.Days - 1);
+        var found = Enumerable.Range(0, 8)
+            .Select(number => new RandomHistory((uint)number))
+            .SelectMany(history => PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last).Findings)
+            .ToList();
+
+        Assert.Equal(RuleBook.All.Select(rule => rule.Name).Order(StringComparer.Ordinal), found.Select(finding => finding.Rule).Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal));
+        Assert.Contains(found, finding => finding is { Rule: "load_ratio", Quantity: "distance" });
+        Assert.Contains(found, finding => Period.DaysBetween(finding.Since, finding.Date) > LoadCalendar.LookBackDays);
+    }
+
     /// <summary>As a person's stretches are computed: each settled by the 7 days behind it.</summary>
     [Fact]
     public void StretchByStretchTheyAreTheSame() => Gen.UInt.Sample(number =>
