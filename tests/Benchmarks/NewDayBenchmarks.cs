@@ -79,10 +79,10 @@ public class NewDayBenchmarks
         var sha = $"{date:uuuuMMdd}{order:x8}".PadLeft(64, '0');
         store.Arrivals.AddWaiting(sha, null, sha, 1);
         var summary = new RecordingSummary(
-            sha, 1, "anna", (date + new LocalTime(9, 0)).InUtc().ToInstant(), Offset.Zero, new Sport("cycling"), 3600, 3600, "device 255/1/7", 2, 3600, 0, order);
+            sha, 1, "anna", (date + new LocalTime(9, 0)).InUtc().ToInstant(), Offset.Zero, new Sport("cycling"), 3600, 3600, "device 255/1/7", new ChannelExtents([]), 3600, 0, order);
         store.Recordings.Add(summary);
         store.Activities.Put(new StoredActivity(
-            summary, new ActivityValues { Quantities = [new Quantity(QuantityNames.BanisterTrimp, 60 + (date.Day * 2), "AU", Estimated: false)] }, [summary.Key]));
+            summary, new ActivityValues { Quantities = [new Quantity(QuantityNames.BanisterTrimp, 60 + (date.Day * 2), "AU", Estimated: false)] }));
         store.People.MarkDirty("anna", date);
     }
 

@@ -19,7 +19,7 @@ public static class PersonTraining
         StoreSession session, WorkingConfiguration configuration, TableBasis basis, Person person, LocalDate? from = null, LocalDate? to = null)
     {
         var recorded = session.Activities.OfPerson(person.Id, from, to)
-            .Select(activity => new RecordedActivity(activity.Winner, activity.Winner.Start.WithOffset(activity.Winner.LocalOffset).LocalDateTime, activity.Values))
+            .Select(activity => new RecordedActivity(activity.Session, activity.Session.Start.WithOffset(activity.Session.LocalOffset).LocalDateTime, activity.Values) { Sources = [.. activity.Merge.Contributions.Select(one => one.Source)] })
             .ToList();
         var sets = session.TableRows.OfPerson(person.Id, RowKind.Sets, from, to);
         var rows = session.TableRows.OfPerson(person.Id, RowKind.Sessions, from, to)

@@ -128,7 +128,7 @@ public sealed class StoredDaysTests
         new(First.PlusDays(day), (session, date) => StoredTraining.Put(session, "anna", kind, date, content), $"{kind}");
 
     private static StoredRow Mistake(LocalDate date) => new(
-        "inbox/mistake.csv", RowKind.Sets, "own", "anna", "anna", date, $"{date:uuuu-MM-dd} mistake", WorkingFolder.Now,
+        "inbox/mistake.csv", RowKind.Sets, "own Sets", "anna", "anna", date, $"{date:uuuu-MM-dd} mistake", WorkingFolder.Now,
         new SetRow(1, null, "ant walk", null, 1, 8, 100, null, 1, null, null, SetLoad.Weight, false, false));
 
     private static void PutRow(StoreSession session, StoredRow row)

@@ -19,19 +19,18 @@ internal static class StoredTraining
         var sha = $"{date:uuuuMMdd}".PadLeft(64, 'a');
         session.Arrivals.AddWaiting(sha, null, sha, 1);
         var summary = new RecordingSummary(
-            sha, 1, person, (date + new LocalTime(9, 0)).InUtc().ToInstant(), Offset.Zero, new Sport("cycling"), 3600, 3600, "device 255/1/7", 2, 3600, 0, date.Day);
+            sha, 1, person, (date + new LocalTime(9, 0)).InUtc().ToInstant(), Offset.Zero, new Sport("cycling"), 3600, 3600, "device 255/1/7", new ChannelExtents([]), 3600, 0, date.Day);
         session.Recordings.Add(summary);
         session.Activities.Put(new StoredActivity(
             summary,
-            new ActivityValues { Quantities = [new Quantity(QuantityNames.BanisterTrimp, Significant.Round(load), "AU", Estimated: false)] },
-            [summary.Key]));
+            new ActivityValues { Quantities = [new Quantity(QuantityNames.BanisterTrimp, Significant.Round(load), "AU", Estimated: false)] }));
         session.People.MarkDirty(person, date);
     }
 
     public static void Put(StoreSession session, string person, RowKind kind, LocalDate date, RowContent content, string scope = "inbox/table.csv")
     {
         var owner = kind == RowKind.Plan ? null : person;
-        session.TableRows.Put([new StoredRow(scope, kind, "own", owner ?? "squad", owner, date, $"{date:uuuu-MM-dd} {kind} {scope}", WorkingFolder.Now, content)]);
+        session.TableRows.Put([new StoredRow(scope, kind, $"own {kind}", owner ?? "squad", owner, date, $"{date:uuuu-MM-dd} {kind} {scope}", WorkingFolder.Now, content)]);
         session.People.MarkDirty(person, date);
     }
 
