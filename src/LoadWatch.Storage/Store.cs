@@ -13,6 +13,7 @@ public sealed class Store : IDisposable
     private readonly Lock writing = new();
     private readonly ConcurrentBag<DbConnection> idleReaders = [];
     private DurabilityLostException? lost;
+    private long rowsRead;
 
     private Store(Dialect dialect, DatabaseFile file, bool toWrite)
     {
@@ -43,6 +44,9 @@ public sealed class Store : IDisposable
         return new Store(sqlite, new DatabaseFile(folder.DatabasePath), toWrite: false);
     }
 
+    /// <summary>Rows that sessions of this store have read so far: what a piece of work costs, whatever else the machine does.</summary>
+    public long RowsRead => Interlocked.Read(ref rowsRead);
+
     /// <summary>Runs the work in one transaction: all of it is durable when this returns, none of it when it throws (I-4).</summary>
     /// <exception cref="DurabilityLostException">The disk failed to keep what it was given; the store writes no more.</exception>
     public void Write(Action<StoreSession> work) =>
@@ -62,7 +66,7 @@ public sealed class Store : IDisposable
             try
             {
                 using var transaction = dialect.BeginWrite(Writer);
-                var result = work(new StoreSession(dialect, transaction));
+                var result = work(new StoreSession(dialect, transaction, CountRows));
                 file.Check();
                 transaction.Commit();
                 file.NoteLog();
@@ -87,7 +91,7 @@ public sealed class Store : IDisposable
         try
         {
             using var transaction = dialect.BeginRead(reader);
-            return work(new StoreSession(dialect, transaction));
+            return work(new StoreSession(dialect, transaction, CountRows));
         }
         finally
         {
@@ -145,6 +149,8 @@ public sealed class Store : IDisposable
             $"{folder.DatabasePath} is missing although the archive beside it holds originals: no empty one is made in its place. Put it back from a backup "
             + "(deploy/README.md, Backing up and restoring), or, to begin anew, move the whole folder away: what is in the inboxes comes in again");
     }
+
+    private void CountRows(int rows) => Interlocked.Add(ref rowsRead, rows);
 
     // After one failed sync the next may claim success over pages that the system has dropped: only a restart and a check tell.
     private void RefuseAfterLoss()

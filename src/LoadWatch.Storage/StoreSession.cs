@@ -21,11 +21,13 @@ namespace LoadWatch.Storage;
 public sealed class StoreSession
 {
     private readonly DbTransaction transaction;
+    private readonly Action<int>? rowsRead;
 
     static StoreSession() => ColumnTypes.Register();
 
-    internal StoreSession(Dialect dialect, DbTransaction transaction)
+    internal StoreSession(Dialect dialect, DbTransaction transaction, Action<int>? rowsRead = null)
     {
+        this.rowsRead = rowsRead;
         Dialect = dialect;
         this.transaction = transaction;
         Arrivals = new ArrivalTable(this);
@@ -96,14 +98,26 @@ public sealed class StoreSession
     internal Dialect Dialect { get; }
 
     /// <summary>All rows, read to the end: an error in any of them is thrown here.</summary>
-    internal List<T> Rows<T>(string sql, object? values = null) => Connection.Query<T>(sql, values, transaction).AsList();
+    internal List<T> Rows<T>(string sql, object? values = null)
+    {
+        var rows = Connection.Query<T>(sql, values, transaction).AsList();
+        rowsRead?.Invoke(rows.Count);
+        return rows;
+    }
 
     /// <summary>The only row, or null.</summary>
     internal T? Row<T>(string sql, object? values = null)
-        where T : class =>
-        Connection.QuerySingleOrDefault<T>(sql, values, transaction);
+        where T : class
+    {
+        rowsRead?.Invoke(1);
+        return Connection.QuerySingleOrDefault<T>(sql, values, transaction);
+    }
 
-    internal T? Value<T>(string sql, object? values = null) => Connection.ExecuteScalar<T>(sql, values, transaction);
+    internal T? Value<T>(string sql, object? values = null)
+    {
+        rowsRead?.Invoke(1);
+        return Connection.ExecuteScalar<T>(sql, values, transaction);
+    }
 
     /// <summary>Number of rows changed.</summary>
     internal int Execute(string sql, object? values = null) => Connection.Execute(sql, values, transaction);

@@ -22,6 +22,17 @@ public sealed class StoreTests(SharedFolder shared) : StoreTest(shared)
     }
 
     [Fact]
+    public void RowsReadAreCounted()
+    {
+        Store.Write(session => Enumerable.Range(1, 3).ToList().ForEach(number => session.Arrivals.AddWaiting(Some.Sha(number), null, Some.Sha(number), 10)));
+        var before = Store.RowsRead;
+
+        Store.Read(session => session.Arrivals.All());
+
+        Assert.Equal(3, Store.RowsRead - before);
+    }
+
+    [Fact]
     public void WorkGoesOnAfterAnExceptionInATransaction()
     {
         Assert.Throws<InvalidOperationException>(() => Store.Write(_ => throw new InvalidOperationException("half way")));

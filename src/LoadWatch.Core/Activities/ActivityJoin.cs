@@ -37,14 +37,12 @@ public static class ActivityJoin
     private static IReadOnlyList<JoinQuestion> InOrder(IEnumerable<JoinQuestion> questions) =>
         [.. questions.Distinct().OrderBy(one => one.Date).ThenBy(one => one.Sentence, StringComparer.Ordinal)];
 
-    private static IReadOnlyList<string> UnknownExercises(IEnumerable<OwnedRow> rows, ComputationSettings settings) => [.. rows
-        .Select(row => row.Content)
-        .OfType<SetRow>()
-        .Select(SetRows.Exercise)
-        .OfType<string>()
-        .Select(ExerciseWord.Canonical)
-        .OfType<string>()
-        .Where(word => !settings.Exercises.ContainsKey(word))
-        .Distinct(StringComparer.Ordinal)
-        .Order(StringComparer.Ordinal)];
+    private static IReadOnlyList<UnknownExercise> UnknownExercises(IEnumerable<OwnedRow> rows, ComputationSettings settings) => [.. rows
+        .Where(row => row.Content is SetRow)
+        .Select(row => (row.Date, Word: ExerciseWord.Canonical(SetRows.Exercise((SetRow)row.Content))))
+        .Where(done => done.Word is { } word && !settings.Exercises.ContainsKey(word))
+        .Select(done => new UnknownExercise(done.Date, done.Word!))
+        .Distinct()
+        .OrderBy(done => done.Date)
+        .ThenBy(done => done.Word, StringComparer.Ordinal)];
 }

@@ -15,4 +15,8 @@ public sealed record ActivityOnDay(
     IReadOnlyList<string> Sources,
     double? Load,
     IReadOnlyList<RegionStimulus> Stimulus,
-    bool AddsLoad = true);
+    bool AddsLoad = true)
+{
+    /// <summary>What its day keeps of it; null: nothing looks back at it.</summary>
+    public DaySession? Session { get; init; }
+}

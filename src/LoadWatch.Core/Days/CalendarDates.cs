@@ -7,24 +7,24 @@ namespace LoadWatch.Days;
 internal static class CalendarDates
 {
     /// <summary>A recording speaks for its source's empty days up to this many days before it, back to the source's last recording. Days.</summary>
-    private const int SettledDaysBack = 7;
+    private const int SettledDaysBack = LoadCalendar.SettledDaysBack;
 
-    public static IEnumerable<CalendarDate> Lay(IReadOnlyList<ActivityOnDay> activities, LocalDate through, PersonPlan plan)
+    /// <summary>The dates behind <paramref name="last"/>, else from the first activity on, up to <paramref name="to"/>. Later activities only settle them.</summary>
+    public static IEnumerable<CalendarDate> Lay(Day? last, IReadOnlyList<ActivityOnDay> activities, LocalDate to, PersonPlan plan)
     {
-        var counted = activities.Where(activity => activity.Date <= through).ToList();
-        return counted.Count == 0 ? [] : Settle(counted.Min(activity => activity.Date), ByDate(counted, through), plan);
+        var first = last?.Date.PlusDays(1) ?? (activities.Count == 0 ? LocalDate.MaxIsoValue : activities.Min(activity => activity.Date));
+        return first > to ? [] : Settle(first, last, ByDate(first, to, activities), Period.DaysBetween(first, to) + 1, plan);
     }
 
-    private static List<ActivityOnDay>[] ByDate(List<ActivityOnDay> activities, LocalDate through)
+    private static List<ActivityOnDay>[] ByDate(LocalDate first, LocalDate to, IReadOnlyList<ActivityOnDay> activities)
     {
-        var first = activities.Min(activity => activity.Date);
-        var dates = new List<ActivityOnDay>[Period.DaysBetween(first, through) + 1];
+        var dates = new List<ActivityOnDay>[Period.DaysBetween(first, to) + 1 + SettledDaysBack];
         for (var index = 0; index < dates.Length; index++)
         {
             dates[index] = [];
         }
 
-        foreach (var activity in activities.OrderBy(activity => activity.Key, StringComparer.Ordinal))
+        foreach (var activity in activities.Where(activity => activity.Date >= first && activity.Date <= to.PlusDays(SettledDaysBack)).OrderBy(activity => activity.Key, StringComparer.Ordinal))
         {
             dates[Period.DaysBetween(first, activity.Date)].Add(activity);
         }
@@ -32,16 +32,19 @@ internal static class CalendarDates
         return dates;
     }
 
-    private static IEnumerable<CalendarDate> Settle(LocalDate first, List<ActivityOnDay>[] dates, PersonPlan plan)
+    private static IEnumerable<CalendarDate> Settle(LocalDate first, Day? last, List<ActivityOnDay>[] dates, int count, PersonPlan plan)
     {
-        var witnesses = Witnesses(dates);
-        var recorded = 0;
-        for (var index = 0; index < dates.Length; index++)
+        var sources = last?.Carried.Sources ?? Carried.Nothing.Sources;
+        var witnesses = Witnesses(dates, sources.ToDictionary(seen => seen.Key, seen => Period.DaysBetween(first, seen.Value), StringComparer.Ordinal));
+        var recorded = -1 - (last?.DaysSinceRecorded ?? 0);
+        for (var index = 0; index < count; index++)
         {
+            var date = first.PlusDays(index);
             recorded = dates[index].Count > 0 ? index : recorded;
-            var planned = plan.On(first.PlusDays(index));
+            sources = Seen(sources, dates[index], date);
+            var planned = plan.On(date);
             var (state, source) = State(dates[index].Count > 0, planned.RestStatedBy, witnesses[index]);
-            yield return new CalendarDate(first.PlusDays(index), index, state, source, index - recorded, dates[index], planned);
+            yield return new CalendarDate(date, state, source, index - recorded, dates[index], planned, sources);
         }
     }
 
@@ -53,21 +56,37 @@ internal static class CalendarDates
         _ => (DayState.Unknown, null),
     };
 
+    private static IReadOnlyDictionary<string, LocalDate> Seen(IReadOnlyDictionary<string, LocalDate> sources, List<ActivityOnDay> activities, LocalDate date)
+    {
+        if (activities.Count == 0)
+        {
+            return sources;
+        }
+
+        var seen = new SortedDictionary<string, LocalDate>(sources.ToDictionary(), StringComparer.Ordinal);
+        foreach (var source in activities.SelectMany(activity => activity.Sources))
+        {
+            seen[source] = date;
+        }
+
+        return seen;
+    }
+
     /// <summary>
     /// For every date the ordinally smallest source that recorded before it and again within the 7 days after it, or null. A source says nothing about
     /// the time before its first recording: a new watch does not know what the old one would have seen.
     /// </summary>
-    private static string?[] Witnesses(List<ActivityOnDay>[] dates)
+    /// <param name="before">Index of the last recorded date by source; below 0 those before the first date.</param>
+    private static string?[] Witnesses(List<ActivityOnDay>[] dates, Dictionary<string, int> before)
     {
         var witnesses = new string?[dates.Length];
-        var before = new Dictionary<string, int>(StringComparer.Ordinal);
         for (var index = 0; index < dates.Length; index++)
         {
             foreach (var source in dates[index].SelectMany(activity => activity.Sources).Distinct(StringComparer.Ordinal))
             {
                 if (before.TryGetValue(source, out var last))
                 {
-                    Testify(witnesses.AsSpan(Math.Max(last + 1, index - SettledDaysBack)..index), source);
+                    Testify(witnesses.AsSpan(Math.Max(0, Math.Max(last + 1, index - SettledDaysBack))..index), source);
                 }
 
                 before[source] = index;

@@ -1,3 +1,4 @@
+using System.Text.Json.Serialization;
 using LoadWatch.Plans;
 using LoadWatch.Stimulus;
 using NodaTime;
@@ -79,6 +80,12 @@ public sealed record Day
     public DayPlan Plan { get; init; } = DayPlan.None;
 
     public IReadOnlyDictionary<BodyRegion, RegionDay> Regions { get; init; } = new Dictionary<BodyRegion, RegionDay>();
+
+    /// <summary>What later dates need of its sessions, in key order. Days read for a brief or an export hold none.</summary>
+    public IReadOnlyList<DaySession> Sessions { get; init; } = [];
+
+    /// <summary>What is carried to the next date. Days read for a brief or an export hold nothing.</summary>
+    public Carried Carried { get; init; } = Carried.Nothing;
 }
 
 /// <summary>The stimulus side of a day for one body region.</summary>
@@ -92,6 +99,10 @@ public sealed record Day
 /// <param name="UsualGapDays">The person's usual gap between heavy-or-fast days: the median over the last 365 days, days; null under 4 gaps.</param>
 public sealed record RegionDay(bool? HeavyOrFast, int? Days7, int? Days28, int? DaysSince, int KnownDaysSince, double? UsualGapDays)
 {
+    /// <summary>There was no heavy-or-fast day since the region can be seen, however long ago.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingDefault)]
+    public bool Never { get; init; }
+
     /// <summary>Before any channel could see the region.</summary>
     public static RegionDay NotCovered { get; } = new(null, null, null, null, 0, null);
 }

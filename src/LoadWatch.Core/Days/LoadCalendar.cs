@@ -7,6 +7,12 @@ namespace LoadWatch.Days;
 /// <summary>Lays one person's activities out as unbroken dates with their trends. Pure: the order of the activities does not matter (I-5).</summary>
 public static class LoadCalendar
 {
+    /// <summary>No value and no rule looks further back than this; what would is carried (<see cref="Carried"/>). Days.</summary>
+    public const int LookBackDays = 400;
+
+    /// <summary>A recording settles the state of this many days before it (I-6). Days.</summary>
+    public const int SettledDaysBack = 7;
+
     /// <summary>
     /// Every date from the first activity to <paramref name="through"/>, oldest first; empty without activities. Activities dated later
     /// are ignored. A day's own state may still be settled by recordings of the 7 days after it (I-6), and with it the values that rest
@@ -14,13 +20,32 @@ public static class LoadCalendar
     /// </summary>
     /// <param name="plan">What plan and answers say of the person: rest that they state is known, and each day carries what holds on it. Null: nothing.</param>
     /// <exception cref="ArgumentException">A load is not finite.</exception>
-    public static IReadOnlyList<Day> Build(string person, IReadOnlyList<ActivityOnDay> activities, LocalDate through, PersonPlan? plan = null)
+    public static IReadOnlyList<Day> Build(string person, IReadOnlyList<ActivityOnDay> activities, LocalDate through, PersonPlan? plan = null) =>
+        Continue(person, [], [.. activities.Where(activity => activity.Date <= through)], through, plan ?? PersonPlan.None);
+
+    /// <summary>The dates behind those that there are, up to <paramref name="to"/>: the same as if all were laid out at once.</summary>
+    /// <param name="before">Unbroken days up to the one before: all of them, or the last <see cref="LookBackDays"/>; none: it begins with the first activity.</param>
+    /// <param name="activities">Of the dates to lay out; those of the 7 days behind <paramref name="to"/> settle them.</param>
+    public static IReadOnlyList<Day> Continue(
+        string person, IReadOnlyList<Day> before, IReadOnlyList<ActivityOnDay> activities, LocalDate to, PersonPlan plan)
     {
-        var loads = new LoadTrend();
-        var regions = BodyRegions.All.Select(region => new StimulusTrend(region)).ToList();
-        return CalendarDates.Lay(activities, through, plan ?? PersonPlan.None)
+        var loads = LoadTrend.After(before);
+        var regions = BodyRegions.All.Select(region => StimulusTrend.After(region, before)).ToList();
+        return CalendarDates.Lay(before.Count == 0 ? null : before[^1], activities, to, plan)
             .Select(date => loads.Add(Bare(person, date)) with { Regions = Regions(regions, date) })
             .ToList();
+    }
+
+    /// <summary>The same days by another quantity. Of a stretch that began earlier the trends of the first 28 are not to be used.</summary>
+    /// <param name="load">What a session of a day has of it, or null.</param>
+    /// <param name="firstCovered">The first date with a known value, where that is known already.</param>
+    public static IReadOnlyList<Day> By(IReadOnlyList<Day> days, Func<Day, DaySession, double?> load, LocalDate? firstCovered)
+    {
+        var trend = new LoadTrend(firstCovered);
+        return [.. days.Select(day => trend.Add(day with
+        {
+            Load = DayLoad.Of(day.State, [.. day.Sessions.Where(session => session.AddsLoad).Select(session => load(day, session))]),
+        }))];
     }
 
     private static Day Bare(string person, CalendarDate date) => new()
@@ -32,6 +57,8 @@ public static class LoadCalendar
         Load = date.Load,
         DaysSinceRecorded = date.DaysSinceRecorded,
         Plan = date.Plan,
+        Sessions = [.. date.Activities.Select(activity => activity.Session).OfType<DaySession>()],
+        Carried = new Carried { Sources = date.Sources },
     };
 
     private static Dictionary<BodyRegion, RegionDay> Regions(List<StimulusTrend> trends, CalendarDate date) =>

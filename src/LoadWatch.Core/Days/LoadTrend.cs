@@ -5,11 +5,13 @@
 // A: load of the last 7 days, W1..W3: the weeks before, E: see WeightedAverage. Loads in the group's unit, ratios dimensionless.
 // Departures: a window with unknown days is scaled to its known ones, and is null where too few are known; over zero a ratio is null.
 using System.Runtime.InteropServices;
+using NodaTime;
 
 namespace LoadWatch.Days;
 
 /// <summary>One person's load trends. Takes every date in order, oldest first.</summary>
-internal sealed class LoadTrend
+/// <param name="firstCovered">The first date with known load, where that is known already.</param>
+internal sealed class LoadTrend(LocalDate? firstCovered = null)
 {
     private const int KnownOf7 = 5;
     private const int KnownOf21 = 17;
@@ -17,18 +19,40 @@ internal sealed class LoadTrend
     private const int MedianDays = 365;
 
     private readonly List<double?> loads = [];
-    private int? firstCovered;
     private readonly List<double?> chronics = [];
     private readonly RunningMedian chronicMedian = new();
     private readonly WeightedAverage acuteAverage = new(7);
     private readonly WeightedAverage chronicAverage = new(28);
+    private LocalDate? firstCovered = firstCovered;
+
+    /// <summary>The trends as they stood on the last of some days: all of them, or the last <see cref="LoadCalendar.LookBackDays"/>.</summary>
+    public static LoadTrend After(IReadOnlyList<Day> days)
+    {
+        if (days.Count == 0)
+        {
+            return new LoadTrend();
+        }
+
+        var last = days[^1];
+        var trend = new LoadTrend(last.DaysSinceFirstCovered is { } ago ? last.Date.PlusDays(-ago) : null);
+        foreach (var day in days)
+        {
+            trend.loads.Add(day.Load);
+            trend.Learn(day.Chronic);
+        }
+
+        trend.acuteAverage.GoOnFrom(last.EwmaAcute);
+        trend.chronicAverage.GoOnFrom(last.EwmaChronic);
+        return trend;
+    }
 
     /// <summary>The same day with its load trends.</summary>
     public Day Add(Day day)
     {
         loads.Add(day.Load);
-        firstCovered ??= day.Load.HasValue ? loads.Count - 1 : null;
-        return WithMedian(WithSpread(WithAverages(WithWeeks(day with { DaysSinceFirstCovered = loads.Count - 1 - firstCovered }))));
+        firstCovered ??= day.Load.HasValue ? day.Date : null;
+        var covered = firstCovered <= day.Date ? Period.DaysBetween(firstCovered.Value, day.Date) : (int?)null;
+        return WithMedian(WithSpread(WithAverages(WithWeeks(day with { DaysSinceFirstCovered = covered }))));
     }
 
     private ReadOnlySpan<double?> Loads => CollectionsMarshal.AsSpan(loads);
@@ -68,10 +92,15 @@ internal sealed class LoadTrend
 
     private Day WithMedian(Day day)
     {
-        chronics.Add(day.Chronic);
-        chronicMedian.Add(day.Chronic);
-        chronicMedian.Remove(chronics.Count > MedianDays ? chronics[^(MedianDays + 1)] : null);
+        Learn(day.Chronic);
         return day with { ChronicMedian = chronicMedian.Value };
+    }
+
+    private void Learn(double? chronic)
+    {
+        chronics.Add(chronic);
+        chronicMedian.Add(chronic);
+        chronicMedian.Remove(chronics.Count > MedianDays ? chronics[^(MedianDays + 1)] : null);
     }
 
     private static double? Ratio(double? value, double? over) => over is null or 0 ? null : Significant.Round(value / over);

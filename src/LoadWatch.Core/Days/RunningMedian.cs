@@ -20,6 +20,14 @@ internal sealed class RunningMedian
         }
     }
 
+    public void AddAll(IEnumerable<double> values)
+    {
+        foreach (var value in values)
+        {
+            Add(value);
+        }
+    }
+
     /// <summary>Takes out one value that was added before; null is nothing to take out.</summary>
     public void Remove(double? value)
     {

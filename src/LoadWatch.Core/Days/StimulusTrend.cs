@@ -17,7 +17,24 @@ internal sealed class StimulusTrend(BodyRegion region)
     private int oldestHeavy;
     private int knownDaysSince;
 
+    /// <summary>Index of the first covered day, which stands in where there was no heavy-or-fast day yet; below 0 before the days at hand.</summary>
+    private int firstCovered;
+
     public BodyRegion Region => region;
+
+    /// <summary>The trend as it stood on the last of some days: all of them, or the last <see cref="LoadCalendar.LookBackDays"/>.</summary>
+    public static StimulusTrend After(BodyRegion region, IReadOnlyList<Day> days)
+    {
+        var trend = new StimulusTrend(region);
+        if (days.Count > 0 && days[^1].Regions.GetValueOrDefault(region) is { DaysSince: { } ago } last)
+        {
+            trend.judged.AddRange(days.Select(day => day.Regions.GetValueOrDefault(region)?.HeavyOrFast));
+            trend.knownDaysSince = last.KnownDaysSince;
+            trend.Remember(trend.Today - ago, last.Never);
+        }
+
+        return trend;
+    }
 
     public RegionDay Add(CalendarDate date)
     {
@@ -30,19 +47,31 @@ internal sealed class StimulusTrend(BodyRegion region)
         Count();
         ForgetOldGaps();
         var usual = gaps.Count >= GapsWanted ? gaps.Value : null;
-        return new RegionDay(judged[^1], HeavyAmong(7), HeavyAmong(28), Today - LastHeavy, knownDaysSince, usual);
+        return new RegionDay(judged[^1], HeavyAmong(7), HeavyAmong(28), Today - LastHeavy, knownDaysSince, usual) { Never = heavyDays.Count == 0 };
     }
 
     private int Today => judged.Count - 1;
 
-    /// <summary>The first covered day stands in where there was no heavy-or-fast day yet.</summary>
-    private int LastHeavy => heavyDays.Count == 0 ? 0 : heavyDays[^1];
+    private int LastHeavy => heavyDays.Count == 0 ? firstCovered : heavyDays[^1];
+
+    private void Remember(int reference, bool never)
+    {
+        firstCovered = reference;
+        heavyDays.AddRange(Enumerable.Range(0, judged.Count).Where(index => judged[index] is true));
+        if (!never && heavyDays.Count == 0)
+        {
+            heavyDays.Add(reference);
+        }
+
+        gaps.AddAll(heavyDays.Zip(heavyDays.Skip(1), (one, next) => (double)(next - one)));
+        ForgetOldGaps();
+    }
 
     private void Count()
     {
         if (judged[^1] is true)
         {
-            gaps.Add(heavyDays.Count == 0 ? null : Today - LastHeavy);
+            gaps.Add(oldestHeavy < heavyDays.Count ? Today - LastHeavy : null);
             heavyDays.Add(Today);
             knownDaysSince = 0;
         }

@@ -11,6 +11,9 @@ internal sealed class WeightedAverage(int days)
     private readonly double weight = 2.0 / (days + 1);
     private double? value;
 
+    /// <summary>Takes up a series behind a day of this average.</summary>
+    public void GoOnFrom(double? average) => value = average;
+
     /// <summary>The average with this day, load per day; null before the first known load.</summary>
     public double? Add(double? load)
     {

@@ -22,17 +22,15 @@ public sealed class FallingCapacityRule : IRule
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var limits = subject.Limits.FallingCapacity;
-        if (subject.Days.Count == 0)
-        {
-            return [];
-        }
-
-        return subject.Activities
-            .SelectMany(activity => ShownBy(activity, limits))
-            .GroupBy(shown => shown.Quantity.Name, StringComparer.Ordinal)
-            .OrderBy(shown => shown.Key, StringComparer.Ordinal)
-            .SelectMany(shown => Evaluate(subject, shown.Key, OfOneSport(shown), Percent(shown.Key, limits)!.Value));
+        var shown = subject.Activities.SelectMany(activity => ShownBy(activity, limits)).ToLookup(one => one.Quantity.Name, StringComparer.Ordinal);
+        return shown.Select(one => one.Key)
+            .Concat(subject.Memory.KeysBefore.Where(key => key.StartsWith(KeyOf(""), StringComparison.Ordinal)).Select(key => key[KeyOf("").Length..]))
+            .Distinct(StringComparer.Ordinal)
+            .Order(StringComparer.Ordinal)
+            .SelectMany(quantity => Evaluate(subject, quantity, [.. shown[quantity].OrderBy(one => one.Date)], Percent(quantity, limits)!.Value));
     }
+
+    private string KeyOf(string quantity) => $"{Name}/{quantity}";
 
     /// <summary>A walk shows no top speed, and a sensor that writes nought shows nothing.</summary>
     private static IEnumerable<Shown> ShownBy(JoinedActivity activity, FallingCapacityLimits limits) => activity.Quantities
@@ -40,15 +38,12 @@ public sealed class FallingCapacityRule : IRule
         .Where(quantity => quantity.Name != QuantityNames.SpeedTop || activity.Sport.Name is not ("walking" or "hiking"))
         .Select(quantity => new Shown(activity.Date, activity.Sport.IsTeamSport ? "team" : activity.Sport.Name, quantity));
 
-    /// <summary>The sport with the most sessions: a best on the bicycle says nothing of one on the ergometer.</summary>
-    private static List<Shown> OfOneSport(IEnumerable<Shown> shown) =>
-    [
-        .. shown.GroupBy(one => one.Sport, StringComparer.Ordinal)
-            .OrderByDescending(sport => sport.Count())
-            .ThenBy(sport => sport.Key, StringComparer.Ordinal)
-            .First()
-            .OrderBy(one => one.Date),
-    ];
+    /// <summary>The sport with the most sessions of both stretches: a best on the bicycle says nothing of one on the ergometer.</summary>
+    private static List<Shown> OfOneSport(List<Shown> shown) => shown
+        .GroupBy(one => one.Sport, StringComparer.Ordinal)
+        .OrderByDescending(sport => sport.Count())
+        .ThenBy(sport => sport.Key, StringComparer.Ordinal)
+        .FirstOrDefault()?.ToList() ?? [];
 
     private static double? Percent(string quantity, FallingCapacityLimits limits) => quantity switch
     {
@@ -60,8 +55,8 @@ public sealed class FallingCapacityRule : IRule
 
     private IEnumerable<Finding> Evaluate(RuleSubject subject, string quantity, List<Shown> shown, double percent)
     {
-        var run = new FindingRun<Bests>();
-        foreach (var day in subject.Days)
+        var run = new FindingRun<Bests>(onDays: 1, subject.Memory.Before<RunState<Bests>>(KeyOf(quantity)));
+        foreach (var day in subject.Judged)
         {
             if (IsOff(day))
             {
@@ -72,6 +67,7 @@ public sealed class FallingCapacityRule : IRule
                 run.Read(day.Date, read, read.FallPercent > percent, read.FallPercent > percent);
             }
 
+            subject.Memory.Keep(day.Date, KeyOf(quantity), run.State);
             if (run is { Since: { } start, Reading: { } bests })
             {
                 yield return Find(subject.Person, day.Date, quantity, start, bests, percent, subject.Limits.FallingCapacity);
@@ -84,8 +80,9 @@ public sealed class FallingCapacityRule : IRule
     private static Bests? Read(List<Shown> shown, LocalDate date, FallingCapacityLimits limits)
     {
         var (middle, first) = (date.PlusDays(-limits.Days), date.PlusDays(-2 * limits.Days));
-        var late = shown.Where(one => one.Date > middle && one.Date <= date).ToList();
-        var early = shown.Where(one => one.Date > first && one.Date <= middle).ToList();
+        var both = OfOneSport(shown.FindAll(one => one.Date > first && one.Date <= date));
+        var late = both.FindAll(one => one.Date > middle);
+        var early = both.FindAll(one => one.Date <= middle);
         return late.Count < limits.SessionsWanted || early.Count < limits.SessionsWanted
             ? null
             : new Bests(late.MaxBy(one => one.Quantity.Value)!, early.MaxBy(one => one.Quantity.Value)!, late.Count, early.Count);

@@ -24,13 +24,14 @@ public sealed class FallingLoadRule : IRule
     public bool IsEnabled(RuleLimits limits) => limits.FallingLoad.Enabled;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) => WatchedSeries.Of(subject, subject.Limits.FallingLoad.Quantities)
-        .SelectMany(series => Evaluate(series, subject.Limits.FallingLoad))
+        .SelectMany(series => Evaluate(subject, series, subject.Limits.FallingLoad))
         .OrderBy(finding => finding.Date);
 
-    private IEnumerable<Finding> Evaluate(WatchedSeries series, FallingLoadLimits limits)
+    private IEnumerable<Finding> Evaluate(RuleSubject subject, WatchedSeries series, FallingLoadLimits limits)
     {
-        var run = new FindingRun<Fall>();
-        for (var index = 0; index < series.Days.Count; index++)
+        var key = series.KeyOf(this);
+        var run = new FindingRun<Fall>(onDays: 1, subject.Memory.Before<RunState<Fall>>(key));
+        for (var index = subject.First; index < series.Days.Count; index++)
         {
             var day = series.Days[index];
             if (day.Plan.IsAwayOrReturning() || day.Plan.IsLight())
@@ -42,6 +43,7 @@ public sealed class FallingLoadRule : IRule
                 run.Read(day.Date, fall, fall.Ratio < limits.Notice, fall.Ratio < Math.Max(limits.Return, limits.Notice));
             }
 
+            subject.Memory.Keep(day.Date, key, run.State);
             if (run is { Since: { } since, Reading: { } read })
             {
                 yield return Find(series, day.Date, since, read, limits);

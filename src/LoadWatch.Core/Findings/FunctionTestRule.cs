@@ -23,21 +23,28 @@ public sealed class FunctionTestRule : IRule
     private IEnumerable<Finding> Evaluate(RuleSubject subject, FunctionTest test)
     {
         var results = Results(subject.Tests, test);
-        if (results.Count == 0)
+        var key = $"{Name}/{test.Word}";
+        var known = subject.Memory.Before<Known>(key);
+        if (results.Count == 0 && known is null)
         {
             yield break;
         }
 
         var next = 0;
-        Judgement? judged = null;
-        foreach (var day in subject.Days)
+        foreach (var day in subject.Judged)
         {
             for (; next < results.Count && results[next].Date <= day.Date; next++)
             {
-                judged = Judge(subject, test, results[next], results.Take(next).LastOrDefault(result => result.Value.HasValue));
+                known = new Known(Judge(subject, test, results[next], known?.Valued), results[next].Value.HasValue ? results[next] : known?.Valued);
             }
 
-            if (judged is not null && day.Date < judged.Result.Date.PlusDays(subject.Limits.FunctionTest.HoldDays))
+            if (known?.Judged is { } ended && day.Date >= ended.Result.Date.PlusDays(subject.Limits.FunctionTest.HoldDays))
+            {
+                known = known with { Judged = null };
+            }
+
+            subject.Memory.Keep(day.Date, key, known is { Judged: null, Valued: null } ? null : known);
+            if (known?.Judged is { } judged)
             {
                 yield return Find(subject.Person, test, day.Date, judged);
             }
@@ -122,4 +129,7 @@ public sealed class FunctionTestRule : IRule
     private sealed record Result(LocalDate Date, double? Value, TestOutcome? Outcome);
 
     private sealed record Judgement(Result Result, Result? Before, double? CutOff, double Error, string Why);
+
+    /// <summary>What was made of the latest test, and the latest that has a value.</summary>
+    private sealed record Known(Judgement? Judged, Result? Valued);
 }

@@ -19,13 +19,22 @@ public sealed class HardDaysRule : IRule
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var limits = subject.Limits.HardDays;
-        var (rows, matches) = (new HardRows(limits), new MatchDensity(limits));
-        LocalDate? since = null;
-        foreach (var day in subject.Days)
+        var before = subject.Memory.Before<Standing>(Name);
+        var rows = new HardRows(limits, before?.Rows, before?.Row);
+        var matches = new MatchDensity(limits, before?.Matches);
+        var since = before?.Since;
+        foreach (var day in subject.Days.Take(subject.First))
+        {
+            rows.Learn(day);
+            matches.Learn(day);
+        }
+
+        foreach (var day in subject.Judged)
         {
             rows.Pass(day);
             matches.Pass(day);
             since = rows.Standing is null && matches.Standing is null ? null : since ?? day.Date;
+            subject.Memory.Keep(day.Date, Name, rows.Row is null && matches.State is null ? null : new Standing(since, rows.State, rows.Row, matches.State));
             if (since is { } start)
             {
                 yield return rows.Standing is { } row ? OfRow(subject, day.Date, start, row) : OfMatches(subject, day.Date, start, matches.Standing!);
@@ -71,4 +80,6 @@ public sealed class HardDaysRule : IRule
 
     private Finding Found(RuleSubject subject, LocalDate date, LocalDate since, double value, double limit, string unit, string text, Evidence evidence) =>
         new(subject.Person.Id, date, Name, Region: null, Severity.Notice, since, value, limit, unit, text, evidence);
+
+    private sealed record Standing(LocalDate? Since, RunState<HardRow>? Rows, HardRow? Row, RunState<MatchCount>? Matches);
 }

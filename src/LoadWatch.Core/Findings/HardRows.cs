@@ -4,15 +4,22 @@ using NodaTime;
 namespace LoadWatch.Findings;
 
 /// <summary>Hard days in a row. Takes every day in order.</summary>
-internal sealed class HardRows(HardDaysLimits limits)
+/// <param name="before">The run on the day before the first date.</param>
+/// <param name="rowBefore">The row that had not ended then, long enough or not.</param>
+internal sealed class HardRows(HardDaysLimits limits, RunState<HardRow>? before, HardRow? rowBefore)
 {
-    private readonly FindingRun<HardRow> run = new();
+    private readonly FindingRun<HardRow> run = new(onDays: 1, before);
     private readonly Queue<double?> window = [];
     private readonly RunningMedian training = new();
-    private HardRow? row;
+    private HardRow? row = rowBefore;
 
     /// <summary>The row that is long enough and has not ended; null where there is none.</summary>
     public HardRow? Standing => run.Since is null ? null : run.Reading;
+
+    /// <summary>The row that has not ended, long enough or not.</summary>
+    public HardRow? Row => row;
+
+    public RunState<HardRow>? State => run.State;
 
     public void Pass(Day day)
     {
@@ -36,7 +43,8 @@ internal sealed class HardRows(HardDaysLimits limits)
         run.Read(date, row ?? new HardRow(date, 0, 0, load, median, training.Count), row?.Days >= limits.Days, hard);
     }
 
-    private void Learn(Day day)
+    /// <summary>A day before the first date.</summary>
+    public void Learn(Day day)
     {
         var load = day is { State: DayState.Recorded, Load: > 0 } ? day.Load : null;
         training.Add(load);

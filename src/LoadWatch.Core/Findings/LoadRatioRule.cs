@@ -22,13 +22,14 @@ public sealed class LoadRatioRule : IRule
     public bool IsEnabled(RuleLimits limits) => limits.LoadRatio.Enabled;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) => WatchedSeries.Of(subject, subject.Limits.LoadRatio.Quantities)
-        .SelectMany(series => Evaluate(series, subject.Limits.LoadRatio))
+        .SelectMany(series => Evaluate(subject, series, subject.Limits.LoadRatio))
         .OrderBy(finding => finding.Date);
 
-    private IEnumerable<Finding> Evaluate(WatchedSeries series, LoadRatioLimits limits)
+    private IEnumerable<Finding> Evaluate(RuleSubject subject, WatchedSeries series, LoadRatioLimits limits)
     {
-        var run = new FindingRun<Day>();
-        foreach (var day in series.Days)
+        var key = series.KeyOf(this);
+        var run = new FindingRun<Ratio>(onDays: 1, subject.Memory.Before<RunState<Ratio>>(key));
+        foreach (var day in series.Days.Skip(subject.First))
         {
             if (day.Plan.IsAwayOrReturning())
             {
@@ -36,9 +37,10 @@ public sealed class LoadRatioRule : IRule
             }
             else if (IsKnown(day, limits))
             {
-                run.Read(day.Date, day, Raises(day, limits), day.RatioUncoupled >= Math.Min(limits.Return, limits.Raise));
+                run.Read(day.Date, Ratio.Of(day), Raises(day, limits), day.RatioUncoupled >= Math.Min(limits.Return, limits.Raise));
             }
 
+            subject.Memory.Keep(day.Date, key, run.State);
             if (run is { Since: { } since, Reading: { } read })
             {
                 yield return Find(series, day.Date, since, read, limits);
@@ -56,14 +58,14 @@ public sealed class LoadRatioRule : IRule
         && day.DaysSinceFirstCovered >= limits.HistoryDays
         && day.Chronic > Significant.Round(limits.ChronicShareOfMedian * day.ChronicMedian);
 
-    private Finding Find(WatchedSeries series, LocalDate date, LocalDate since, Day read, LoadRatioLimits limits) => new(
+    private Finding Find(WatchedSeries series, LocalDate date, LocalDate since, Ratio read, LoadRatioLimits limits) => new(
         series.Person.Id,
         date,
         Name,
         Region: null,
         Severity.Warning,
         since,
-        read.RatioUncoupled!.Value,
+        read.RatioUncoupled,
         limits.Raise,
         "ratio",
         Sentence(series, date, since, read, limits),
@@ -72,11 +74,11 @@ public sealed class LoadRatioRule : IRule
         Quantity = series.Quantity,
     };
 
-    private static string Sentence(WatchedSeries series, LocalDate date, LocalDate since, Day read, LoadRatioLimits limits)
+    private static string Sentence(WatchedSeries series, LocalDate date, LocalDate since, Ratio read, LoadRatioLimits limits)
     {
-        var ratio = read.RatioUncoupled!.Value;
+        var ratio = read.RatioUncoupled;
         var what = $"{series.Heading} of the last 7 days {Wording.Is(read.Date, date)} {Wording.Ratio(ratio, limits.Raise)} times the usual week "
-            + $"({Wording.Number(read.Acute!.Value)} against {Wording.Number(read.ChronicBefore!.Value)} {series.Unit})";
+            + $"({Wording.Number(read.Acute)} against {Wording.Number(read.ChronicBefore)} {series.Unit})";
         return $"{what}{Wording.NotKnownSince(read.Date, date)}{Against(ratio, Wording.Date(since, date), limits)}.";
     }
 
@@ -87,7 +89,7 @@ public sealed class LoadRatioRule : IRule
         _ => $"; it passed the limit of {Wording.Limit(limits.Raise)} on {since} and returns below {Wording.Limit(limits.Return)}",
     };
 
-    private static Evidence Basis(Day read, LoadRatioLimits limits, string loadUnit) => new(
+    private static Evidence Basis(Ratio read, LoadRatioLimits limits, string loadUnit) => new(
         "uncoupled ratio = load of the last 7 days / mean week of the 21 days before, both scaled to their known days",
         "Windt and Gabbett 2018, Br J Sports Med 53:988-990; limits: a choice",
         [
@@ -107,4 +109,30 @@ public sealed class LoadRatioRule : IRule
             new("covered_of_28_wanted", limits.CoveredOf28, "days"),
             new("chronic_share_of_median_wanted", limits.ChronicShareOfMedian, "share"),
         ]);
+
+    /// <summary>What a date shows; loads in the series' unit.</summary>
+    private sealed record Ratio(
+        LocalDate Date,
+        double RatioUncoupled,
+        double Acute,
+        double ChronicBefore,
+        double? RatioCoupled,
+        double? Chronic,
+        double? ChronicMedian,
+        double Coverage7,
+        double Coverage28,
+        int? DaysSinceFirstCovered)
+    {
+        public static Ratio Of(Day day) => new(
+            day.Date,
+            day.RatioUncoupled!.Value,
+            day.Acute!.Value,
+            day.ChronicBefore!.Value,
+            day.RatioCoupled,
+            day.Chronic,
+            day.ChronicMedian,
+            day.Coverage7,
+            day.Coverage28,
+            day.DaysSinceFirstCovered);
+    }
 }

@@ -4,15 +4,19 @@ using NodaTime;
 namespace LoadWatch.Findings;
 
 /// <summary>Matches close together. Takes every day in order.</summary>
-internal sealed class MatchDensity(HardDaysLimits limits)
+/// <param name="before">The run on the day before the first date.</param>
+internal sealed class MatchDensity(HardDaysLimits limits, RunState<MatchCount>? before)
 {
-    private readonly FindingRun<MatchCount> run = new();
+    private readonly FindingRun<MatchCount> run = new(onDays: 1, before);
     private readonly Queue<LocalDate> matches = [];
 
     /// <summary>Null where there are not too many.</summary>
     public MatchCount? Standing => run.Since is null ? null : run.Reading;
 
-    public void Pass(Day day)
+    public RunState<MatchCount>? State => run.State;
+
+    /// <summary>A day before the first date.</summary>
+    public void Learn(Day day)
     {
         if (day.Plan is { IsMatch: true, Absence: null } && day.State != DayState.Rest)
         {
@@ -23,7 +27,11 @@ internal sealed class MatchDensity(HardDaysLimits limits)
         {
             matches.Dequeue();
         }
+    }
 
+    public void Pass(Day day)
+    {
+        Learn(day);
         if (day.State != DayState.Unknown)
         {
             var many = matches.Count >= limits.Matches;

@@ -20,14 +20,15 @@ public sealed class MonotonyRule : IRule
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var (days, limits) = (subject.Days, subject.Limits.Monotony);
-        var run = new FindingRun<EvenWeek>();
-        for (var index = 0; index < days.Count; index++)
+        var run = new FindingRun<EvenWeek>(onDays: 1, subject.Memory.Before<RunState<EvenWeek>>(Name));
+        for (var index = subject.First; index < days.Count; index++)
         {
             if (Read(days, index, limits) is { } week)
             {
                 run.Read(week.Date, week, Raises(week, limits), Holds(week, limits));
             }
 
+            subject.Memory.Keep(days[index].Date, Name, run.State);
             if (run is { Since: { } since, Reading: { } read })
             {
                 yield return Find(subject, days[index].Date, since, read, limits);

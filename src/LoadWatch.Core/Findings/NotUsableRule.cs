@@ -19,24 +19,25 @@ public sealed class NotUsableRule : IRule
     {
         var limits = subject.Limits.NotUsable;
         var useless = Useless(subject, limits.UsableShare);
-        LocalDate? since = null;
-        List<(LocalDate Date, Channel Channel, double Share)> lately = [];
-        foreach (var day in useless.Count == 0 ? [] : subject.Days)
+        var run = new FindingRun<Lately>(onDays: 1, subject.Memory.Before<RunState<Lately>>(Name));
+        foreach (var day in subject.Judged)
         {
             if (day.State == DayState.Recorded)
             {
-                lately = useless.FindAll(one => one.Date > day.Date.PlusDays(-limits.Days) && one.Date <= day.Date);
-                since = lately.Count >= limits.Sessions ? since ?? day.Date : null;
+                var lately = useless.FindAll(one => one.Date > day.Date.PlusDays(-limits.Days) && one.Date <= day.Date);
+                var many = lately.Count >= limits.Sessions;
+                run.Read(day.Date, new Lately(lately), many, many);
             }
 
-            if (since is { } start)
+            subject.Memory.Keep(day.Date, Name, run.State);
+            if (run is { Since: { } since, Reading: { } read })
             {
-                yield return Find(subject, day, start, lately, limits);
+                yield return Find(subject, day, since, read.Sessions, limits);
             }
         }
     }
 
-    private static List<(LocalDate Date, Channel Channel, double Share)> Useless(RuleSubject subject, double wanted) =>
+    private static List<Poor> Useless(RuleSubject subject, double wanted) =>
     [
         .. subject.Activities
             .SelectMany(activity => Poorest(subject, activity, wanted))
@@ -44,17 +45,17 @@ public sealed class NotUsableRule : IRule
     ];
 
     /// <summary>One entry a session: the poorest of its channels. Heart rate that is not to be used for this person is not missed.</summary>
-    private static IEnumerable<(LocalDate Date, Channel Channel, double Share)> Poorest(RuleSubject subject, JoinedActivity activity, double wanted) => activity.UsableShare
+    private static IEnumerable<Poor> Poorest(RuleSubject subject, JoinedActivity activity, double wanted) => activity.UsableShare
         .Where(share => Watched.Contains(share.Key) && share.Value < wanted)
         .Where(share => share.Key != Channel.Power || !activity.Sport.IsOnFoot)
         .Where(share => share.Key != Channel.HeartRate || subject.Person.HeartRateIsValidOn(activity.Date))
         .OrderBy(share => share.Value)
         .ThenBy(share => share.Key)
         .Take(1)
-        .Select(share => (activity.Date, share.Key, share.Value));
+        .Select(share => new Poor(activity.Date, share.Key, share.Value));
 
     private Finding Find(
-        RuleSubject subject, Day day, LocalDate since, List<(LocalDate Date, Channel Channel, double Share)> lately, NotUsableLimits limits)
+        RuleSubject subject, Day day, LocalDate since, IReadOnlyList<Poor> lately, NotUsableLimits limits)
     {
         var channels = string.Join(" and ", lately.Select(one => ChannelWords.Of(one.Channel)).Distinct(StringComparer.Ordinal));
         return new Finding(
@@ -78,4 +79,9 @@ public sealed class NotUsableRule : IRule
                     new("usable_share_wanted", limits.UsableShare, "share"),
                 ]));
     }
+
+    /// <summary>A session of too little quality, by the poorest of its channels.</summary>
+    private sealed record Poor(LocalDate Date, Channel Channel, double Share);
+
+    private sealed record Lately(IReadOnlyList<Poor> Sessions);
 }

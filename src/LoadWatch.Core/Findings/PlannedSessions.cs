@@ -4,22 +4,35 @@ using NodaTime;
 namespace LoadWatch.Findings;
 
 /// <summary>The planned sessions of a person that should have brought a recording and have not, since the last one that came. Takes every day in order.</summary>
-internal sealed class PlannedSessions(SilenceLimits limits)
+/// <param name="before">As it stood on the day before the first date.</param>
+internal sealed class PlannedSessions(SilenceLimits limits, MissedSessions? before)
 {
     /// <summary>A plan that has expected nothing for so long says nothing about silence any more. Days.</summary>
     private const int WatchedDays = 28;
 
-    private readonly List<LocalDate> without = [];
+    /// <summary>Of more than these only the number is kept: a season without any recording is told by its first ones.</summary>
+    private const int Told = 20;
+
     private readonly List<LocalDate> expected = [];
+    private readonly List<LocalDate> first = [.. before?.First ?? []];
+    private readonly List<LocalDate> pending = [.. before?.Pending ?? []];
+    private int missed = before?.Count ?? 0;
     private LocalDate today;
 
     /// <summary>Whether the plan has told often enough when recordings are to come; a plan that begins does not hide a silence that stands.</summary>
     public bool IsWatched => expected.Count(date => date.PlusDays(limits.PlannedWaitDays) <= today) >= limits.PlannedMissed;
 
-    /// <summary>Dates without a recording, oldest first, those left out that may still come in.</summary>
-    public IReadOnlyList<LocalDate> Missed => [.. without.TakeWhile(date => date.PlusDays(limits.PlannedWaitDays) <= today)];
+    /// <summary>How many are without a recording, those left out that may still come in.</summary>
+    public int Missed => missed;
 
-    public void Add(Day day)
+    /// <summary>Dates of the first of them, oldest first; at least as many as raise something.</summary>
+    public IReadOnlyList<LocalDate> First => first;
+
+    /// <summary>What the next date needs; null: nothing.</summary>
+    public MissedSessions? State => missed == 0 && pending.Count == 0 ? null : new MissedSessions(missed, [.. first], [.. pending]);
+
+    /// <summary>A day before the first date.</summary>
+    public void Learn(Day day)
     {
         today = day.Date;
         expected.RemoveAll(date => Period.DaysBetween(date, today) > WatchedDays);
@@ -27,14 +40,35 @@ internal sealed class PlannedSessions(SilenceLimits limits)
         {
             expected.Add(day.Date);
         }
+    }
 
+    public void Add(Day day)
+    {
+        Learn(day);
         if (day.State == DayState.Recorded || day.Plan.Absence is not null)
         {
-            without.Clear();
+            missed = 0;
+            first.Clear();
+            pending.Clear();
         }
         else if (day.Plan.Expected > 0)
         {
-            without.Add(day.Date);
+            pending.Add(day.Date);
         }
+
+        Count();
+    }
+
+    private void Count()
+    {
+        var due = pending.FindAll(date => date.PlusDays(limits.PlannedWaitDays) <= today);
+        pending.RemoveRange(0, due.Count);
+        missed += due.Count;
+        first.AddRange(due.Take(Told - first.Count));
     }
 }
+
+/// <param name="Count">Sessions without a recording.</param>
+/// <param name="First">Dates of the first of them.</param>
+/// <param name="Pending">Dates of those that may still come in.</param>
+internal sealed record MissedSessions(int Count, IReadOnlyList<LocalDate> First, IReadOnlyList<LocalDate> Pending);

@@ -13,6 +13,12 @@ namespace LoadWatch.Findings;
 /// <param name="Limits">Of the person's group.</param>
 public sealed record RuleSubject(Person Person, IReadOnlyList<Day> Days, RuleLimits Limits)
 {
+    /// <summary>The first date to judge; null: that of the first day. The days before it are there to look back at.</summary>
+    public LocalDate? From { get; init; }
+
+    /// <summary>What rules kept on the day before <see cref="From"/>, and where they put what they keep.</summary>
+    public RuleMemory Memory { get; init; } = new(Carried.Nothing);
+
     /// <summary>Unit of the group's load, for texts and evidence.</summary>
     public string LoadUnit { get; init; } = LoadRatioRule.ArbitraryUnits;
 
@@ -22,16 +28,22 @@ public sealed record RuleSubject(Person Person, IReadOnlyList<Day> Days, RuleLim
     /// <summary>The load that each session counts with on its day, by key of the activity; null where that is the quantity as the activity has it.</summary>
     public IReadOnlyDictionary<string, double?>? SessionLoads { get; init; }
 
-    /// <summary>What counts of the person's training up to the last day, by date, then key.</summary>
+    /// <summary>What counts of the person's training up to the last day, by date, then key; from the look-back before <see cref="From"/> on.</summary>
     public IReadOnlyList<JoinedActivity> Activities { get; init; } = [];
 
     public PersonPlan Plan { get; init; } = PersonPlan.None;
 
-    /// <summary>Function tests up to the last day, by date.</summary>
+    /// <summary>Function tests from <see cref="From"/> to the last day, by date.</summary>
     public IReadOnlyList<DatedTest> Tests { get; init; } = [];
 
     /// <summary>Days by other quantities that the limits name, by name of the quantity; each as long as <see cref="Days"/>.</summary>
     public IReadOnlyDictionary<string, QuantitySeries> Series { get; init; } = new Dictionary<string, QuantitySeries>();
+
+    /// <summary>Index of the first day to judge.</summary>
+    internal int First => Days.Count == 0 || From is not { } from ? 0 : Math.Clamp(Period.DaysBetween(Days[0].Date, from), 0, Days.Count);
+
+    /// <summary>The days to judge.</summary>
+    internal IEnumerable<Day> Judged => Days.Skip(First);
 }
 
 /// <summary>The days of a quantity other than the group's load.</summary>

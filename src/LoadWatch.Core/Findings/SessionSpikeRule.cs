@@ -14,18 +14,23 @@ public sealed class SessionSpikeRule : IRule
 {
     public string Name => "session_spike";
 
+    private string KeyOfRuns => $"{Name}/{QuantityNames.Distance}";
+
     public bool IsEnabled(RuleLimits limits) => limits.SessionSpike.Enabled;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var limits = subject.Limits.SessionSpike;
         var sizes = new SessionSizes(subject);
-        var (runs, loads) = (new SpikeHold(limits.HoldDays), new SpikeHold(limits.HoldDays));
-        foreach (var day in subject.Days)
+        var runs = new SpikeHold(limits.HoldDays, subject.Memory.Before<SpikesStanding>(KeyOfRuns));
+        var loads = new SpikeHold(limits.HoldDays, subject.Memory.Before<SpikesStanding>(Name));
+        foreach (var day in subject.Judged)
         {
             var spikes = day.Plan.IsMatch ? [] : sizes.Spikes(day.Date).ToList();
             runs.Pass(day, spikes.Where(spike => spike.OfRun));
             loads.Pass(day, spikes.Where(spike => !spike.OfRun));
+            subject.Memory.Keep(day.Date, KeyOfRuns, runs.State);
+            subject.Memory.Keep(day.Date, Name, loads.State);
             foreach (var hold in new[] { loads, runs })
             {
                 if (hold is { Since: { } since, Shown: { } spike })

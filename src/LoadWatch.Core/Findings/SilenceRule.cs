@@ -18,33 +18,42 @@ public sealed class SilenceRule : IRule
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var (person, days, limits) = subject;
-        var recorded = new List<LocalDate>();
-        RecordingRhythm? rhythm = null;
-        var planned = new PlannedSessions(limits.Silence);
-        var silent = 0;
-        foreach (var day in days)
+        var before = subject.Memory.Before<Silence>(Name) ?? new Silence(0, Rhythm: null, Missed: null, LastThere: null);
+        var recorded = days.Take(subject.First).Where(day => day.State == DayState.Recorded).Select(day => day.Date).ToList();
+        var (silent, rhythm, there) = (before.Days, before.Rhythm, before.LastThere ?? LastThereBefore(subject));
+        var planned = new PlannedSessions(limits.Silence, before.Missed);
+        foreach (var day in days.Take(subject.First))
+        {
+            planned.Learn(day);
+        }
+
+        foreach (var day in subject.Judged)
         {
             planned.Add(day);
+            there = subject.Plan.Attendance.GetValueOrDefault(day.Date) ? day.Date : there;
             silent = day.State == DayState.Recorded ? 0 : day.Plan.Absence is null && day.Plan.RestStatedBy is null ? silent + 1 : silent;
             if (day.State == DayState.Recorded)
             {
                 recorded.Add(day.Date);
                 rhythm = RecordingRhythm.Of(recorded, limits.Silence);
             }
-            else if (day.Plan.Absence is not null)
+
+            subject.Memory.Keep(day.Date, Name, new Silence(silent, rhythm, planned.State, there));
+            if (day.State == DayState.Recorded || day.Plan.Absence is not null)
             {
                 continue;
             }
-            else if (planned.IsWatched)
+
+            if (planned.IsWatched)
             {
-                if (planned.Missed.Count >= limits.Silence.PlannedMissed)
+                if (planned.Missed >= limits.Silence.PlannedMissed)
                 {
-                    yield return FindPlanned(person, day, planned.Missed, Attended(subject.Plan, day.Date), limits.Silence);
+                    yield return FindPlanned(person, day, planned, Attended(there, day.Date), limits.Silence);
                 }
             }
             else if (rhythm is not null && silent > rhythm.LimitDays)
             {
-                yield return Find(person, day, silent, Attended(subject.Plan, day.Date), rhythm, limits.Silence);
+                yield return Find(person, day, silent, Attended(there, day.Date), rhythm, limits.Silence);
             }
         }
     }
@@ -62,32 +71,33 @@ public sealed class SilenceRule : IRule
         Sentence(silent, rhythm, attended),
         Basis(silent, rhythm, limits));
 
-    private Finding FindPlanned(Person person, Day day, IReadOnlyList<LocalDate> missed, string attended, SilenceLimits limits) => new(
+    private Finding FindPlanned(Person person, Day day, PlannedSessions planned, string attended, SilenceLimits limits) => new(
         person.Id,
         day.Date,
         Name,
         Region: null,
         Severity.Notice,
-        missed[limits.PlannedMissed - 1].PlusDays(limits.PlannedWaitDays),
-        missed.Count,
+        planned.First[limits.PlannedMissed - 1].PlusDays(limits.PlannedWaitDays),
+        planned.Missed,
         limits.PlannedMissed,
         "sessions",
-        $"No recording of the last {missed.Count} planned sessions, the first on {Wording.Date(missed[0], day.Date)}.{attended}",
+        $"No recording of the last {planned.Missed} planned sessions, the first on {Wording.Date(planned.First[0], day.Date)}.{attended}",
         new Evidence(
             "planned sessions in a row for which a recording was expected and none came, each given some days to come in",
             "a choice",
             [
-                .. missed.Select((date, at) => new EvidenceItem($"missed_{at + 1}", 1, "count", Wording.IsoDate(date))),
+                .. planned.First.Select((date, at) => new EvidenceItem($"missed_{at + 1}", 1, "count", Wording.IsoDate(date))),
                 new("planned_missed", limits.PlannedMissed, "count"),
                 new("planned_wait", limits.PlannedWaitDays, "days"),
             ]));
 
+    private static LocalDate? LastThereBefore(RuleSubject subject) => subject.Judged.FirstOrDefault() is { } first
+        ? subject.Plan.Attendance.Where(day => day.Value && day.Key < first.Date).Max(day => (LocalDate?)day.Key)
+        : null;
+
     /// <summary>Who came and logged nothing is another matter than who stays away.</summary>
-    private static string Attended(PersonPlan plan, LocalDate date)
-    {
-        var there = plan.Attendance.Where(entry => entry.Value && entry.Key <= date).Select(entry => entry.Key).ToList();
-        return there.Count == 0 ? "" : $" Last there on {Wording.Date(there.Max(), date)}, by the list of attendance.";
-    }
+    private static string Attended(LocalDate? there, LocalDate date) =>
+        there is { } last ? $" Last there on {Wording.Date(last, date)}, by the list of attendance." : "";
 
     private static string Sentence(int silent, RecordingRhythm rhythm, string attended)
     {
@@ -110,4 +120,7 @@ public sealed class SilenceRule : IRule
             new("look_back", limits.LookBackDays, "days"),
             new("gaps_wanted", limits.GapsWanted, "count"),
         ]);
+
+    /// <summary>What the next date needs: days without a recording, the rhythm as it was on the last one, and who was there last without one.</summary>
+    private sealed record Silence(int Days, RecordingRhythm? Rhythm, MissedSessions? Missed, LocalDate? LastThere);
 }

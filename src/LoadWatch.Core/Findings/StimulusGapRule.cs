@@ -20,35 +20,34 @@ public sealed class StimulusGapRule : IRule
     public bool IsEnabled(RuleLimits limits) => limits.StimulusGap.Enabled;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) =>
-        Regions.SelectMany(region => Evaluate(subject.Person, region, subject.Days, subject.Limits.StimulusGap)).OrderBy(finding => finding.Date);
+        Regions.SelectMany(region => Evaluate(subject, region, subject.Limits.StimulusGap)).OrderBy(finding => finding.Date);
 
-    private IEnumerable<Finding> Evaluate(Person person, BodyRegion region, IReadOnlyList<Day> days, StimulusGapLimits limits)
+    private IEnumerable<Finding> Evaluate(RuleSubject subject, BodyRegion region, StimulusGapLimits limits)
     {
-        LocalDate? since = null;
-        Gap? read = null;
-        for (var index = 0; index < days.Count; index++)
+        var key = $"{Name}/{BodyRegions.Word(region)}";
+        var run = new FindingRun<Gap>(onDays: 1, subject.Memory.Before<RunState<Gap>>(key));
+        foreach (var day in subject.Judged)
         {
-            if (days[index].Plan.IsAwayOrReturning())
+            if (day.Plan.IsAwayOrReturning())
             {
-                (since, read) = (null, null);
+                run.End();
             }
-            else if (Read(person, region, days, index, limits) is { } gap)
+            else if (Read(subject.Person, region, day, limits) is { } gap)
             {
-                read = gap;
-                since = gap.Days == 0 ? null : since ?? (gap.Days >= gap.Limit.NoticeDays ? gap.Date : null);
+                run.Read(day.Date, gap, gap.Days > 0 && gap.Days >= gap.Limit.NoticeDays, gap.Days > 0);
             }
 
-            if (since is { } start && read is not null)
+            subject.Memory.Keep(day.Date, key, run.State);
+            if (run is { Since: { } since, Reading: { } read })
             {
-                yield return Find(person, days[index].Date, region, start, read, limits);
+                yield return Find(subject.Person, day.Date, region, since, read, limits);
             }
         }
     }
 
     /// <summary>The gap as the date shows it; null where too little is known. A heavy-or-fast day is always known.</summary>
-    private static Gap? Read(Person person, BodyRegion region, IReadOnlyList<Day> days, int index, StimulusGapLimits limits)
+    private static Gap? Read(Person person, BodyRegion region, Day day, StimulusGapLimits limits)
     {
-        var day = days[index];
         var known = day.Regions.GetValueOrDefault(region, RegionDay.NotCovered);
         if (known.HeavyOrFast is null || known.DaysSince is not { } gap || !limits.KnownEnough(known.KnownDaysSince, gap))
         {
@@ -56,8 +55,7 @@ public sealed class StimulusGapRule : IRule
         }
 
         var age = person.AgeOn(day.Date);
-        var never = gap <= index && days[index - gap].Regions.GetValueOrDefault(region)?.HeavyOrFast is not true;
-        return new Gap(day.Date, known.HeavyOrFast is true ? 0 : gap, known, age, StimulusGapLimit.For(age, known, limits), never);
+        return new Gap(day.Date, known.HeavyOrFast is true ? 0 : gap, known, age, StimulusGapLimit.For(age, known, limits), known.Never);
     }
 
     private Finding Find(Person person, LocalDate date, BodyRegion region, LocalDate since, Gap gap, StimulusGapLimits limits)

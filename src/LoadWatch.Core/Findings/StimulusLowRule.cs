@@ -34,26 +34,24 @@ public sealed class StimulusLowRule : IRule
     {
         var series = subject.Days.Select(day => day.Regions.GetValueOrDefault(region, RegionDay.NotCovered)).ToList();
         var first = series.FindIndex(day => day.DaysSince.HasValue);
-        LocalDate? since = null;
-        Count? read = null;
-        var low = 0;
-        for (var index = first; index >= 0 && index < series.Count; index++)
+        var key = $"{Name}/{BodyRegions.Word(region)}";
+        var run = new FindingRun<Count>(OnDays, subject.Memory.Before<RunState<Count>>(key));
+        for (var index = Math.Max(first, subject.First); first >= 0 && index < series.Count; index++)
         {
             var day = subject.Days[index];
             if (IsOff(day))
             {
-                (since, read, low) = (null, null, 0);
+                run.End();
             }
-            else if (index - first >= subject.Limits.StimulusLow.HistoryDays && !(since is null && TheGapTellsIt(subject, day, series[index])) && Read(subject, series, first, index) is { } count)
+            else if (index - first >= subject.Limits.StimulusLow.HistoryDays && !(run.Since is null && TheGapTellsIt(subject, day, series[index])) && Read(subject, series, first, index) is { } count)
             {
-                read = count;
-                low = count.IsLow ? low + 1 : 0;
-                since = low == 0 ? null : since ?? (low >= OnDays ? day.Date : null);
+                run.Read(day.Date, count, count.IsLow, count.IsLow);
             }
 
-            if (since is { } start && read is not null)
+            subject.Memory.Keep(day.Date, key, run.State);
+            if (run is { Since: { } since, Reading: { } read })
             {
-                yield return Find(subject, day, region, start, read);
+                yield return Find(subject, day, region, since, read);
             }
         }
     }

@@ -12,6 +12,9 @@ internal sealed record WatchedSeries(Person Person, string? Quantity, string Uni
     /// <summary>At the beginning of a sentence.</summary>
     public string Heading => Wording.Capital(Quantity is null ? "load" : QuantityWords.Of(Quantity));
 
+    /// <summary>Under which a rule keeps its run over the series.</summary>
+    public string KeyOf(IRule rule) => Quantity is null ? rule.Name : $"{rule.Name}/{Quantity}";
+
     /// <summary>The group's load first, then the quantities by name; one that is the group's load, or that nobody computed, is left out.</summary>
     public static IEnumerable<WatchedSeries> Of(RuleSubject subject, IReadOnlyList<string> quantities)
     {

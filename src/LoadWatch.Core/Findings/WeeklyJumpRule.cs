@@ -21,13 +21,14 @@ public sealed class WeeklyJumpRule : IRule
     public bool IsEnabled(RuleLimits limits) => limits.WeeklyJump.Enabled;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) => WatchedSeries.Of(subject, subject.Limits.WeeklyJump.Quantities)
-        .SelectMany(series => Evaluate(series, subject.Limits.WeeklyJump))
+        .SelectMany(series => Evaluate(subject, series, subject.Limits.WeeklyJump))
         .OrderBy(finding => finding.Date);
 
-    private IEnumerable<Finding> Evaluate(WatchedSeries series, WeeklyJumpLimits limits)
+    private IEnumerable<Finding> Evaluate(RuleSubject subject, WatchedSeries series, WeeklyJumpLimits limits)
     {
-        var run = new FindingRun<Jump>(limits.OnDays);
-        for (var index = 0; index < series.Days.Count; index++)
+        var key = series.KeyOf(this);
+        var run = new FindingRun<Jump>(limits.OnDays, subject.Memory.Before<RunState<Jump>>(key));
+        for (var index = subject.First; index < series.Days.Count; index++)
         {
             var day = series.Days[index];
             if (day.Plan.IsAwayOrReturning())
@@ -39,6 +40,7 @@ public sealed class WeeklyJumpRule : IRule
                 run.Read(day.Date, jump, Raises(jump, limits), jump.Change >= Math.Min(limits.Return, limits.Raise));
             }
 
+            subject.Memory.Keep(day.Date, key, run.State);
             if (run is { Since: { } since, Reading: { } read })
             {
                 yield return Find(series, day.Date, since, read, limits);

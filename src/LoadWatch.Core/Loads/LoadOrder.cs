@@ -20,14 +20,25 @@ public sealed class LoadOrder
     private readonly Lazy<LocalDate?> firstWanted;
     private readonly Dictionary<string, LoadPairs> pairs = new(StringComparer.Ordinal);
     private readonly Dictionary<(LocalDate Month, string From), ConversionLine?> lines = [];
+    private readonly LocalDate firstMonth = LocalDate.MinIsoValue;
+    private readonly CarriedLoads? before;
 
     /// <param name="loadQuantity">Name of the group's load.</param>
     /// <param name="fallbacks">Names of what stands in for it, first choice first.</param>
-    /// <param name="sessions">All of the person, in any order; those of the 12 months before a date at least.</param>
+    /// <param name="sessions">All of the person up to the dates asked for, in any order; with <paramref name="before"/>, from the 12 months before the first month asked for on.</param>
     /// <param name="heartRateValid">Whether loads from heart rate mean anything for the person on a date.</param>
+    /// <param name="before">What is carried of the sessions before <paramref name="from"/>; null: there are none but <paramref name="sessions"/>.</param>
+    /// <param name="from">The first date asked for.</param>
     public LoadOrder(
-        string loadQuantity, IReadOnlyList<string> fallbacks, IReadOnlyList<SessionLoads> sessions, Func<LocalDate, bool> heartRateValid)
+        string loadQuantity,
+        IReadOnlyList<string> fallbacks,
+        IReadOnlyList<SessionLoads> sessions,
+        Func<LocalDate, bool> heartRateValid,
+        CarriedLoads? before = null,
+        LocalDate? from = null)
     {
+        this.before = before;
+        firstMonth = before is not null && from is { } first ? LoadConversion.FirstOfMonth(first) : LocalDate.MinIsoValue;
         wanted = loadQuantity;
         this.fallbacks = fallbacks;
         fallbacksWithoutHeartRate = [.. fallbacks.Prepend(QuantityNames.FosterLoad).Where(name => !QuantityNames.IsOfHeartRate(name))];
@@ -60,16 +71,35 @@ public sealed class LoadOrder
             : new ChosenLoad(rated.Value, Estimated: true, QuantityNames.FosterLoad, Line: null);
     }
 
+    /// <summary>What is to be carried behind a date.</summary>
+    public CarriedLoads CarriedOn(LocalDate date) => new(
+        firstWanted.Value <= date ? firstWanted.Value : null,
+        fallbacksWithoutHeartRate.Distinct(StringComparer.Ordinal)
+            .Order(StringComparer.Ordinal)
+            .Select(from => (from, Line: LastLine(date, from)))
+            .Where(last => last.Line is not null)
+            .ToDictionary(last => last.from, last => last.Line!, StringComparer.Ordinal));
+
     /// <summary>Since heart rate is not valid no new pairs come: the last line that there was goes on.</summary>
-    private ConversionLine? LastLine(LocalDate date, string from) => Enumerable.Range(0, LastLineMonths)
-        .Select(months => Line(date.PlusMonths(-months), from))
-        .FirstOrDefault(line => line is not null);
+    private ConversionLine? LastLine(LocalDate date, string from)
+    {
+        var oldest = LoadConversion.FirstOfMonth(date).PlusMonths(1 - LastLineMonths);
+        for (var month = LoadConversion.FirstOfMonth(date); month >= oldest && month >= firstMonth; month = month.PlusMonths(-1))
+        {
+            if (Line(month, from) is { } line)
+            {
+                return line;
+            }
+        }
+
+        return before?.LastLines.GetValueOrDefault(from) is { } carried && carried.Before >= oldest ? carried : null;
+    }
 
     /// <summary>
     /// The first date with a load of the group's kind; null without any: such a person has a series of ratings, in their own unit. Mixed with converted ones
     /// it would break.
     /// </summary>
-    private LocalDate? FirstWanted() => sessions.Value.Where(session => session[wanted] is not null).Min(session => (LocalDate?)session.Date);
+    private LocalDate? FirstWanted() => before?.FirstWanted ?? sessions.Value.Where(session => session[wanted] is not null).Min(session => (LocalDate?)session.Date);
 
     private ConversionLine? Line(LocalDate date, string from)
     {

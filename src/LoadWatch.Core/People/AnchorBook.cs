@@ -20,6 +20,9 @@ public sealed class AnchorBook
 
     public static AnchorBook Empty { get; } = new([]);
 
+    /// <summary>One person's anchors.</summary>
+    public AnchorBook OfPerson(string person) => new(all.Where(anchor => anchor.Person == person));
+
     /// <summary>This book and more anchors.</summary>
     public AnchorBook With(IEnumerable<Anchor> more) => new([.. all, .. more]);
 

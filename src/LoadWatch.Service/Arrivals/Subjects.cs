@@ -64,6 +64,10 @@ public sealed class Subjects
         return Find(row.Subject) is { } found ? [found] : null;
     }
 
+    /// <summary>Whether what a row of plan or answers is about, where it is no one person's, means this person too; nobody named means everybody.</summary>
+    public Func<string, bool> Means(Person person) => written => written.Length == 0
+        || (FindGroup(written) is { } group ? person.Group == group.Id : Find(written)?.Id == person.Id);
+
     private static T? Only<T>(IEnumerable<T> all)
         where T : class =>
         all.Take(2).ToList() is [var only] ? only : null;

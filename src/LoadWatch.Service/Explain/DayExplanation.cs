@@ -38,7 +38,7 @@ public static class DayExplanation
         AppendDecisions(text, session, known.Id, day.Date);
         AppendTrends(text, day, configuration.Groups[known.Group].LoadQuantity);
         var recorded = session.Activities.OfPerson(known.Id, day.Date, day.Date).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
-        foreach (var activity in PersonTraining.Of(session, configuration, TableBasis.Of(configuration, session), known).Activities.Where(activity => activity.Date == day.Date))
+        foreach (var activity in PersonTraining.Of(session, configuration, TableBasis.Of(configuration, session), known, day.Date, day.Date).Activities)
         {
             AppendActivity(text, session, activity, recorded.GetValueOrDefault(activity.Key));
         }

@@ -63,8 +63,7 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
         var owner = configuration.People[id];
         var recorded = session.Activities.OfPerson(id, from, to).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
         basis ??= TableBasis.Of(configuration, session);
-        return PersonTraining.Of(session, configuration, basis, owner).Activities
-            .Where(activity => InRange(activity.Date))
+        return PersonTraining.Of(session, configuration, basis, owner, from, to).Activities
             .Select(activity => Activity(owner, activity, recorded.GetValueOrDefault(activity.Key)));
     }
 

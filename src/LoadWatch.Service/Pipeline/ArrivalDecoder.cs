@@ -1,7 +1,6 @@
 using LoadWatch.Activities;
 using LoadWatch.Decoding;
 using LoadWatch.People;
-using LoadWatch.Plans;
 using LoadWatch.Recordings;
 using LoadWatch.Rows;
 using LoadWatch.Service.Arrivals;
@@ -17,7 +16,7 @@ namespace LoadWatch.Service.Pipeline;
 public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSet decoders, Archive archive, Instant now)
 {
     /// <summary>What tables say that recordings are computed with; the sweep keeps it up to date.</summary>
-    public TableBasis Basis { get; set; } = new(configuration.Anchors, Enumerable.Empty<PlanEntry>().ToLookup(_ => ""));
+    public TableBasis Basis { get; set; } = TableBasis.Of(configuration);
 
     /// <summary>Never fails for what the content holds: one that breaks the computation is refused, and the others go on (I-10).</summary>
     /// <param name="claims">Ids of the people whom all sightings of the content name, or the one whom a decision names; where none, the devices or the content itself tell.</param>
@@ -86,7 +85,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         var questions = new List<string>();
         foreach (var (recording, person) in owned)
         {
-            var implausible = person is null ? null : Plausibility.Of(recording, person, Basis.Anchors, LocalStart.Of(recording, person).Date);
+            var implausible = person is null ? null : Plausibility.Of(recording, person, Basis.AnchorsOf(person), LocalStart.Of(recording, person).Date);
             if (person is null)
             {
                 questions.Add($"\"{recording.Subject}\" is not in the roster: a line there, an alias or a line in devices.csv takes the recording up");
@@ -123,7 +122,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
 
     /// <summary>Why a file cannot be its owner's, by the first of its recordings that says so.</summary>
     private string? Implausible(DecodedFile file, ArrivalVerdict verdict) => verdict.Person is { } id && configuration.People.TryGetValue(id, out var person)
-        ? Usable(file).Select(recording => Plausibility.Of(recording, person, Basis.Anchors, LocalStart.Of(recording, person).Date)).FirstOrDefault(reason => reason is not null)
+        ? Usable(file).Select(recording => Plausibility.Of(recording, person, Basis.AnchorsOf(person), LocalStart.Of(recording, person).Date)).FirstOrDefault(reason => reason is not null)
         : null;
 
     /// <summary>Folders only name people of the roster; one whom a decision names may have left it since.</summary>
@@ -172,8 +171,8 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         var planned = Basis.Planned(person, LocalStart.Of(recording, person).Date);
         var cut = SessionWindow.Of(recording, planned) is { } window ? RecordingCut.To(recording, window.Start, window.End) : new CutRecording(recording, []);
         return cut.LeftOut.Count == 0
-            ? ActivityComputation.Compute(usable, person, Basis.Anchors, configuration.Computation)
-            : Cut(ActivityComputation.Compute(cut.Recording, person, Basis.Anchors, configuration.Computation));
+            ? ActivityComputation.Compute(usable, person, Basis.AnchorsOf(person), configuration.Computation)
+            : Cut(ActivityComputation.Compute(cut.Recording, person, Basis.AnchorsOf(person), configuration.Computation));
 
         ActivityValues Cut(ActivityValues values) => values with { Remarks = [.. cut.LeftOut, .. values.Remarks] };
     }

@@ -1,110 +1,73 @@
-using LoadWatch.Activities;
 using LoadWatch.Days;
-using LoadWatch.Findings;
 using LoadWatch.People;
-using LoadWatch.Plans;
-using LoadWatch.Rows;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
-using LoadWatch.Storage.Rows;
+using LoadWatch.Storage.People;
 using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
 
-/// <summary>Brings the days and findings of everybody up to the last date that is over in their zone (I-14).</summary>
+/// <summary>
+/// Brings the days and findings of everybody up to the last date that is over in their zone (I-14). It costs what is new, not what there is: who is not behind is
+/// not looked at, and of who is, only the dates from the first that changed on are computed.
+/// </summary>
 public sealed class DayUpdate(WorkingConfiguration configuration, Store store, Instant now, SweepReport report)
 {
-    /// <summary>A later recording settles up to seven earlier days (I-6).</summary>
-    private const int SettlingDays = 7;
-
     private const int PeopleInOneCommit = 20;
-
-    /// <summary>Recordings of squads are often uploaded two days later.</summary>
-    private const int WaitDays = 2;
-
-    private const int QuestionDays = 60;
-
-    private TableBasis basis = null!;
-    private IReadOnlyDictionary<string, PersonPlan> plans = null!;
-    private IReadOnlyDictionary<string, long> marks = null!;
 
     /// <summary>Dates through which people are computed, by person, where it is not the last date that is over for them.</summary>
     public IReadOnlyDictionary<string, LocalDate> Through { get; init; } = new Dictionary<string, LocalDate>();
 
     public void Run(CancellationToken cancel)
     {
-        var behind = store.Read(session =>
+        var basis = TableBasis.Of(configuration, store);
+        foreach (var group in Behind(basis).Chunk(PeopleInOneCommit))
         {
-            basis = TableBasis.Of(configuration, session);
-            plans = new PersonPlans(configuration).Of(session);
-            marks = session.People.Marks();
-            var dirty = session.People.Dirty().ToDictionary(item => item.Person, item => item.From, StringComparer.Ordinal);
-            return configuration.People.Values
-                .OrderBy(person => person.Id, StringComparer.Ordinal)
-                .Select(person => (person, From: RecomputeFrom(session, person, dirty)))
-                .Where(item => item.From is not null)
-                .ToList();
-        });
-        foreach (var group in behind.Chunk(PeopleInOneCommit))
-        {
-            cancel.ThrowIfCancellationRequested();
-            var computed = group.AsParallel().AsOrdered().Select(item => Compute(item.person, item.From!.Value)).ToList();
-            store.Write(session => computed.ForEach(series => series.Write(session)));
-            report.PeopleComputed += computed.Count;
-            report.Advanced();
+            Compute(group, cancel);
+            report.PeopleComputed += group.Length;
         }
     }
 
     /// <summary>The last date that is over for the person: the one that rules and alerts look at.</summary>
     public static LocalDate LastDateOver(Person person, Instant now) => now.InZone(person.Zone).Date.PlusDays(-1);
 
+    private void Compute(IReadOnlyList<DayRun> group, CancellationToken cancel)
+    {
+        while (group.Any(run => !run.IsDone))
+        {
+            cancel.ThrowIfCancellationRequested();
+            var stretches = group.Where(run => !run.IsDone).ToList().AsParallel().AsOrdered().Select(run => store.Read(run.Next)).ToList();
+            store.Write(session => stretches.ForEach(stretch => stretch.Write(session)));
+            report.Advanced();
+        }
+    }
+
     private LocalDate ThroughOf(Person person) => Through.TryGetValue(person.Id, out var date) ? date : LastDateOver(person, now);
 
-    private LocalDate? RecomputeFrom(StoreSession session, Person person, Dictionary<string, LocalDate> dirty)
+    private List<DayRun> Behind(TableBasis basis)
     {
-        var asked = dirty.TryGetValue(person.Id, out var date) ? date : (LocalDate?)null;
-        var missing = session.People.ComputedTo(person.Id) is { } done && done < ThroughOf(person) ? done.PlusDays(1) : (LocalDate?)null;
-        var from = asked is { } early && missing is { } next ? LocalDate.Min(early, next) : asked ?? missing;
-        return from?.PlusDays(-SettlingDays);
-    }
-
-    private ComputedSeries Compute(Person person, LocalDate from)
-    {
-        var group = configuration.Groups[person.Group];
-        var through = ThroughOf(person);
-        var (training, tests) = store.Read(session => (
-            PersonTraining.Of(session, configuration, basis, person),
-            session.TableRows.OfPerson(person.Id, RowKind.Tests).Select(row => new DatedTest(row.Date, (TestRow)row.Content)).ToList()));
-        var series = PersonSeries.Of(person, group, training.Activities, tests, plans[person.Id], through);
-        return new ComputedSeries(
-            person.Id,
-            from,
-            through,
-            marks.GetValueOrDefault(person.Id),
-            series.Days.Where(day => day.Date >= from).ToList(),
-            series.Findings.Where(finding => finding.Date >= from).ToList(),
-            Questions(person, training).Where(question => question.Date >= through.PlusDays(-QuestionDays)).ToList());
-    }
-
-    /// <summary>An exercise of a set log that has no body region is asked about with the date of the last session.</summary>
-    private static IEnumerable<Question> Questions(Person person, JoinResult training)
-    {
-        var last = training.Activities.Count == 0 ? (LocalDate?)null : training.Activities[^1].Date;
-        return training.Questions.Select(question => new Question(person.Id, question.MayWait ? question.Date.PlusDays(WaitDays) : question.Date, question.Sentence))
-            .Concat(last is { } date
-                ? training.UnknownExercises.Select(word => new Question(person.Id, date, $"exercise \"{word}\": which body regions? A line under computation, exercises tells"))
-                : []);
-    }
-
-    private sealed record ComputedSeries(
-        string Person, LocalDate From, LocalDate Through, long Marks, IReadOnlyList<Day> Days, IReadOnlyList<Finding> Findings, IReadOnlyList<Question> Questions)
-    {
-        public void Write(StoreSession session)
+        var people = configuration.People.Values.ToDictionary(person => person.Id, StringComparer.Ordinal);
+        if (people.Count == 0)
         {
-            session.Days.Replace(Person, From, Days);
-            session.Findings.Replace(Person, From, Findings);
-            session.Questions.Replace(Person, LocalDate.MinIsoValue, Questions);
-            session.People.Computed(Person, Through, Marks);
+            return [];
         }
+
+        var latest = people.Values.Max(ThroughOf);
+        return
+        [
+            .. store.Read(session => session.People.Behind(latest))
+                .Where(behind => people.ContainsKey(behind.Person))
+                .Select(behind => (Behind: behind, Person: people[behind.Person], From: From(behind, ThroughOf(people[behind.Person]))))
+                .Where(item => item.From is not null)
+                .Select(item => new DayRun(configuration, basis, item.Person, item.From!.Value, ThroughOf(item.Person), item.Behind.Marks)),
+        ];
+    }
+
+    /// <summary>A later recording settles up to seven earlier days (I-6).</summary>
+    private static LocalDate? From(PersonBehind behind, LocalDate through)
+    {
+        var missing = behind.ComputedTo < through ? behind.ComputedTo.Value.PlusDays(1) : (LocalDate?)null;
+        var from = behind.DirtyFrom is { } asked && missing is { } next ? LocalDate.Min(asked, next) : behind.DirtyFrom ?? missing;
+        return from?.PlusDays(-LoadCalendar.SettledDaysBack);
     }
 }

@@ -16,6 +16,9 @@ public sealed class PersonPlans(WorkingConfiguration configuration)
     /// <summary>A stretch of stated rest is not read further than this many days. A choice.</summary>
     private const int LongestRestDays = 400;
 
+    /// <summary>A return counts for 14 days behind a break of 7 or more: so much is read of absences by day tables before the first date. Days.</summary>
+    private const int ReturnLookBackDays = PersonPlan.ReturnDays + PersonPlan.BreakDays + 7;
+
     /// <summary>By the id of everybody in the roster.</summary>
     public IReadOnlyDictionary<string, PersonPlan> Of(StoreSession session)
     {
@@ -28,11 +31,13 @@ public sealed class PersonPlans(WorkingConfiguration configuration)
             StringComparer.OrdinalIgnoreCase);
     }
 
-    public PersonPlan Of(StoreSession session, Person person)
-    {
-        var entries = Entries(session);
-        return Plan([.. entries[""], .. entries[person.Id]], session.TableRows.OfPerson(person.Id, RowKind.Days), session.Decisions.InForce(person.Id));
-    }
+    /// <summary>Of one person, what matters on dates of a range, both ends included.</summary>
+    public PersonPlan Of(StoreSession session, Person person, LocalDate from, LocalDate to) => Plan(
+        [.. session.TableRows.Plan(person.Id, configuration.Subjects.Means(person), from, to).Select(Entry)],
+        session.TableRows.OfPerson(person.Id, RowKind.Days, Back(from, ReturnLookBackDays), to),
+        session.Decisions.OfDates(person.Id, Back(from, PersonPlan.LongestDays), to));
+
+    private static LocalDate Back(LocalDate from, int days) => from < LocalDate.MinIsoValue.PlusDays(days) ? LocalDate.MinIsoValue : from.PlusDays(-days);
 
     /// <summary>Lines of the plan by the person they are about; those about everybody under the empty id.</summary>
     private ILookup<string, PlanEntry> Entries(StoreSession session) => session.TableRows.OfKind(RowKind.Plan)

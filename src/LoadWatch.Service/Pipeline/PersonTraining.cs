@@ -3,21 +3,29 @@ using LoadWatch.People;
 using LoadWatch.Rows;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
+using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
 
-/// <summary>What counts of a person's training: recordings, with the rows of tables that join them or stand for a session alone. Computed when asked, never stored.</summary>
+/// <summary>
+/// What counts of a person's training: recordings, with the rows of tables that join them or stand for a session alone. A date is joined by itself, so a range of
+/// dates is read and joined as it stands. Computed when asked; kept is only what look-backs need (<see cref="LoadWatch.Days.DaySession"/>).
+/// </summary>
 public static class PersonTraining
 {
-    public static JoinResult Of(StoreSession session, WorkingConfiguration configuration, TableBasis basis, Person person)
+    /// <param name="from">First date, or null.</param>
+    /// <param name="to">Last date, or null.</param>
+    public static JoinResult Of(
+        StoreSession session, WorkingConfiguration configuration, TableBasis basis, Person person, LocalDate? from = null, LocalDate? to = null)
     {
-        var recorded = session.Activities.OfPerson(person.Id)
+        var recorded = session.Activities.OfPerson(person.Id, from, to)
             .Select(activity => new RecordedActivity(activity.Session, activity.Session.Start.WithOffset(activity.Session.LocalOffset).LocalDateTime, activity.Values) { Sources = [.. activity.Merge.Contributions.Select(one => one.Source)] })
             .ToList();
-        var rows = session.TableRows.OfPerson(person.Id, RowKind.Sessions)
-            .Concat(session.TableRows.OfPerson(person.Id, RowKind.Sets))
+        var sets = session.TableRows.OfPerson(person.Id, RowKind.Sets, from, to);
+        var rows = session.TableRows.OfPerson(person.Id, RowKind.Sessions, from, to)
+            .Concat(sets)
             .Select(row => new OwnedRow(row.Layout, row.Date, row.Key, row.Content))
             .ToList();
-        return ActivityJoin.Join(person, recorded, rows, basis.Anchors, configuration.Computation);
+        return ActivityJoin.Join(person, recorded, rows, sets.Count == 0 ? AnchorBook.Empty : basis.AnchorsOf(person), configuration.Computation);
     }
 }

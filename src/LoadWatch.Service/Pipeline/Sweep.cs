@@ -61,7 +61,7 @@ public sealed class Sweep
     public SweepReport Run(CancellationToken cancel = default)
     {
         AdoptConfiguration(cancel);
-        decoder.Basis = store.Read(session => TableBasis.Of(configuration, session));
+        decoder.Basis = TableBasis.Of(configuration, store);
         recovery.Run(cancel);
         intake.TakeIn(Inboxes.Changed(configuration, store, Looks, now, Report), cancel);
         moved.TakeUp();
@@ -112,7 +112,7 @@ public sealed class Sweep
     private void TakeUpTables(CancellationToken cancel)
     {
         tables.TakeUp(cancel);
-        decoder.Basis = store.Read(session => TableBasis.Of(configuration, session));
+        decoder.Basis = TableBasis.Of(configuration, store);
         recomputations.Run(cancel);
     }
 

@@ -1,3 +1,4 @@
+using System.Collections.Concurrent;
 using LoadWatch.People;
 using LoadWatch.Plans;
 using LoadWatch.Rows;
@@ -8,19 +9,38 @@ using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
 
-/// <summary>What tables add to the configuration for the computation of recordings: reference values, and the planned sessions that have a time.</summary>
-/// <param name="anchors">Those of the configuration and of the tables.</param>
-/// <param name="planned">Lines of the plan with start and end, by person.</param>
-public sealed class TableBasis(AnchorBook anchors, ILookup<string, PlanEntry> planned)
+/// <summary>
+/// What tables add to the configuration for the computation of recordings: reference values, and the planned sessions that have a time. Reads what is asked for,
+/// of the person and the dates, and keeps it; safe to use from several threads where its source is.
+/// </summary>
+public sealed class TableBasis
 {
-    public AnchorBook Anchors => anchors;
+    private readonly WorkingConfiguration configuration;
+    private readonly Func<Func<StoreSession, IReadOnlyList<StoredRow>>, IReadOnlyList<StoredRow>> read;
+    private readonly ConcurrentDictionary<string, AnchorBook> anchors = new(StringComparer.Ordinal);
+    private readonly ConcurrentDictionary<(string Person, LocalDate Month), IReadOnlyList<PlanEntry>> planned = new();
 
-    public static TableBasis Of(WorkingConfiguration configuration, StoreSession session) => new(
-        configuration.Anchors.With(session.TableRows.OfKind(RowKind.Tests).Select(AnchorOf).OfType<Anchor>()),
-        session.TableRows.OfKind(RowKind.Plan)
-            .Where(row => IsTimed(row.Content))
-            .SelectMany(row => Concerned(configuration, row).Select(person => (person, Entry: PersonPlans.Entry(row))))
-            .ToLookup(pair => pair.person, pair => pair.Entry, StringComparer.Ordinal));
+    private TableBasis(WorkingConfiguration configuration, Func<Func<StoreSession, IReadOnlyList<StoredRow>>, IReadOnlyList<StoredRow>> read)
+    {
+        this.configuration = configuration;
+        this.read = read;
+    }
+
+    /// <summary>The configuration alone.</summary>
+    public static TableBasis Of(WorkingConfiguration configuration) => new(configuration, _ => []);
+
+    /// <summary>As the rows are when they are asked for first.</summary>
+    public static TableBasis Of(WorkingConfiguration configuration, Store store) => new(configuration, store.Read);
+
+    /// <summary>Within one transaction, and not beyond it.</summary>
+    public static TableBasis Of(WorkingConfiguration configuration, StoreSession session) => new(configuration, work => work(session));
+
+    /// <summary>A person's reference values, of the configuration and of the tables.</summary>
+    public AnchorBook AnchorsOf(Person person) => anchors.GetOrAdd(person.Id, id =>
+    {
+        var measured = read(session => session.TableRows.StandingOf(id, RowKind.Tests)).Select(AnchorOf).OfType<Anchor>().ToList();
+        return measured.Count == 0 ? configuration.Anchors : configuration.Anchors.OfPerson(id).With(measured);
+    });
 
     /// <summary>Whether recordings are computed differently by such a row.</summary>
     public static bool Matters(StoredRow row) => IsTimed(row.Content) || AnchorOf(row) is not null;
@@ -37,8 +57,16 @@ public sealed class TableBasis(AnchorBook anchors, ILookup<string, PlanEntry> pl
     /// <summary>Start and end of the person's planned sessions of a date and its neighbours: a recording may run past midnight.</summary>
     public IReadOnlyList<Interval> Planned(Person person, LocalDate date) =>
     [
-        .. planned[person.Id].SelectMany(entry => new[] { -1, 0, 1 }.Select(date.PlusDays).Where(entry.Covers).Select(day => IntervalOf(entry, day, person.Zone))),
+        .. TimedIn(person, date.PlusDays(1 - date.Day)).SelectMany(entry => new[] { -1, 0, 1 }.Select(date.PlusDays).Where(entry.Covers).Select(day => IntervalOf(entry, day, person.Zone))),
     ];
+
+    /// <summary>Lines of the plan with start and end that speak for a date of a month or for one next to it.</summary>
+    private IReadOnlyList<PlanEntry> TimedIn(Person person, LocalDate month) => planned.GetOrAdd((person.Id, month), _ =>
+    [
+        .. read(session => session.TableRows.Plan(person.Id, configuration.Subjects.Means(person), month.PlusDays(-1), month.PlusMonths(1)))
+            .Where(row => IsTimed(row.Content))
+            .Select(PersonPlans.Entry),
+    ]);
 
     private static Interval IntervalOf(PlanEntry entry, LocalDate date, DateTimeZone zone)
     {

@@ -40,6 +40,7 @@ public sealed class ActivityTable
 
     private const string InDates = " WHERE a.date >= @from AND a.date <= @to";
     private const string OfPersonInDates = InDates + " AND a.person = @person";
+    private const string SelectFirst = "SELECT MIN(date) AS date FROM activity WHERE person = @person";
     private const string SelectHistogram = "SELECT bins FROM histogram WHERE activity = @key AND channel = @channel";
 
     private const string SelectPage = SelectActivities + " WHERE a.key > @after ORDER BY a.key LIMIT @most";
@@ -83,6 +84,9 @@ public sealed class ActivityTable
     public IReadOnlyList<StoredActivity> All(LocalDate? from = null, LocalDate? to = null) =>
         Select(InDates, new { from = from ?? LocalDate.MinIsoValue, to = to ?? LocalDate.MaxIsoValue });
 
+    /// <summary>The first date of a person's activities, or null.</summary>
+    public LocalDate? FirstOfPerson(string person) => session.Row<FirstRow>(SelectFirst, new { person })?.Date;
+
     /// <summary>How a person's activities were made whose winning recordings start in the range, both ends included, sorted by that start and by key.</summary>
     public IReadOnlyList<StoredMerge> Merges(string person, Instant from, Instant to) =>
         session.Rows<ActivityRow>(SelectMerges, new { person, from, to }).ConvertAll(row => row.ToMerge());
@@ -101,6 +105,11 @@ public sealed class ActivityTable
             : session.Rows<HistogramRow>(SelectHistograms, new { first = rows[0].Key, last = rows[^1].Key });
         var byActivity = histograms.ToLookup(row => row.Activity, StringComparer.Ordinal);
         return rows.ConvertAll(row => Check(row, byActivity[row.Key]));
+    }
+
+    private sealed class FirstRow
+    {
+        public LocalDate? Date { get; init; }
     }
 
     private static CheckedActivity Check(ActivityRow row, IEnumerable<HistogramRow> histograms)

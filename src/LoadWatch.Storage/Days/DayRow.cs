@@ -10,6 +10,7 @@ namespace LoadWatch.Storage.Days;
 internal sealed class DayRow
 {
     private const string NoPlan = "{}";
+    private const string NoSessions = "[]";
 
     public string Person { get; init; } = "";
 
@@ -57,6 +58,12 @@ internal sealed class DayRow
 
     public string Regions { get; init; } = "";
 
+    /// <summary>Empty where not read.</summary>
+    public string Sessions { get; init; } = "";
+
+    /// <summary>Empty where not read.</summary>
+    public string Carried { get; init; } = "";
+
     public static DayRow From(Day day) => new()
     {
         Person = day.Person,
@@ -82,6 +89,8 @@ internal sealed class DayRow
         DaysSinceRecorded = day.DaysSinceRecorded,
         Plan = day.Plan == DayPlan.None ? NoPlan : JsonText.Write(day.Plan),
         Regions = JsonText.WriteSorted(day.Regions),
+        Sessions = day.Sessions.Count == 0 ? NoSessions : JsonText.Write(day.Sessions),
+        Carried = LoadWatch.Days.Carried.Write(day.Carried),
     };
 
     public Day ToDay() => new()
@@ -109,5 +118,7 @@ internal sealed class DayRow
         DaysSinceRecorded = DaysSinceRecorded,
         Plan = Plan == NoPlan ? DayPlan.None : JsonText.Read<DayPlan>(Plan),
         Regions = JsonText.Read<Dictionary<BodyRegion, RegionDay>>(Regions),
+        Sessions = Sessions is "" or NoSessions ? Array.Empty<DaySession>() : JsonText.Read<List<DaySession>>(Sessions),
+        Carried = Carried.Length == 0 ? LoadWatch.Days.Carried.Nothing : LoadWatch.Days.Carried.Read(Carried),
     };
 }

@@ -13,30 +13,35 @@ public sealed class DayTable
         """;
 
     private const string Insert = $"""
-        INSERT INTO day ({Columns})
+        INSERT INTO day ({Columns}, sessions, carried)
         VALUES (
             @Person, @Date, @State, @StateSource, @Load, @Acute, @Chronic, @ChronicBefore, @RatioCoupled, @RatioUncoupled, @RatioEwma,
             @EwmaAcute, @EwmaChronic, @WeeklyChange, @Monotony, @Strain, @ChronicMedian, @Coverage7, @Coverage28,
-            @DaysSinceFirstCovered, @DaysSinceRecorded, @Plan, @Regions)
+            @DaysSinceFirstCovered, @DaysSinceRecorded, @Plan, @Regions, @Sessions, @Carried)
         """;
 
-    private const string DeleteFrom = "DELETE FROM day WHERE person = @person AND date >= @from";
+    private const string Delete = "DELETE FROM day WHERE person = @person AND date >= @from AND date <= @to";
     private const string SelectOfPerson = $"SELECT {Columns} FROM day WHERE person = @person AND date >= @from AND date <= @to ORDER BY date";
+
+    private const string SelectBefore =
+        $"SELECT {Columns}, sessions FROM day WHERE person = @person AND date >= @from AND date < @last ORDER BY date";
+
+    private const string SelectLast = $"SELECT {Columns}, sessions, carried FROM day WHERE person = @person AND date = @last";
 
     private readonly StoreSession session;
 
     internal DayTable(StoreSession session) => this.session = session;
 
-    /// <summary>Stores a person's days in place of all from a date on.</summary>
-    /// <exception cref="ArgumentException">A day is of somebody else, or before that date.</exception>
-    public void Replace(string person, LocalDate from, IReadOnlyList<Day> days)
+    /// <summary>Stores a person's days in place of all from a date on, up to another where one is given.</summary>
+    /// <exception cref="ArgumentException">A day is of somebody else, or not among those dates.</exception>
+    public void Replace(string person, LocalDate from, IReadOnlyList<Day> days, LocalDate? to = null)
     {
-        if (days.FirstOrDefault(day => day.Date < from || !string.Equals(day.Person, person, StringComparison.Ordinal)) is { } stray)
+        if (days.FirstOrDefault(day => day.Date < from || day.Date > to || !string.Equals(day.Person, person, StringComparison.Ordinal)) is { } stray)
         {
             throw new ArgumentException($"{stray.Date} of {stray.Person} is not among the days of {person} from {from}", nameof(days));
         }
 
-        session.Execute(DeleteFrom, new { person, from });
+        session.Execute(Delete, new { person, from, to = to ?? LocalDate.MaxIsoValue });
         session.ExecuteEach(Insert, days.Select(DayRow.From));
     }
 
@@ -44,4 +49,11 @@ public sealed class DayTable
     public IReadOnlyList<Day> OfPerson(string person, LocalDate? from = null, LocalDate? to = null) =>
         session.Rows<DayRow>(SelectOfPerson, new { person, from = from ?? LocalDate.MinIsoValue, to = to ?? LocalDate.MaxIsoValue })
             .ConvertAll(row => row.ToDay());
+
+    /// <summary>The days before a date that later ones look back at, oldest first, with their sessions; the last of them with what it carries.</summary>
+    public IReadOnlyList<Day> Before(string person, LocalDate date)
+    {
+        var values = new { person, from = date.PlusDays(-LoadCalendar.LookBackDays), last = date.PlusDays(-1) };
+        return [.. session.Rows<DayRow>(SelectBefore, values).Select(row => row.ToDay()), .. session.Rows<DayRow>(SelectLast, values).Select(row => row.ToDay())];
+    }
 }

@@ -9,10 +9,16 @@ namespace LoadWatch.Storage.Decisions;
 public sealed class DecisionTable
 {
     private const string Columns = "id, made, kind, person, alert, detail";
-    private const string Insert = $"INSERT INTO decision ({Columns}) VALUES (@Id, @Made, @Kind, @Person, @Alert, @Detail)";
+    private const string Insert = $"INSERT INTO decision ({Columns}, about_from) VALUES (@Id, @Made, @Kind, @Person, @Alert, @Detail, @AboutFrom)";
     private const string SelectAll = $"SELECT {Columns} FROM decision";
     private const string SelectOfAlert = $"SELECT {Columns} FROM decision WHERE alert = @alertId OR kind = 'withdraw'";
     private const string SelectOfPerson = $"SELECT {Columns} FROM decision WHERE person = @person";
+    private const string SelectOfDates = $"""
+        {SelectOfPerson} AND (
+            kind IN ('ill', 'injured', 'away', 'returning', 'withdraw')
+            OR kind IN ('rest', 'match') AND about_from >= @from AND about_from <= @to)
+        """;
+
     private const string SelectAssigned = $"SELECT {Columns} FROM decision WHERE kind IN ('assign', 'withdraw')";
 
     private readonly StoreSession session;
@@ -30,6 +36,9 @@ public sealed class DecisionTable
 
     /// <summary>Those of a person in force; sorted as above.</summary>
     public IReadOnlyList<Decision> InForce(string person) => InForce(OfPerson(person));
+
+    /// <summary>Those in force about a person's dates: every absence and return, since an open one may go on, and rest and matches that begin in the range; sorted as above.</summary>
+    public IReadOnlyList<Decision> OfDates(string person, LocalDate from, LocalDate to) => InForce(Select(SelectOfDates, new { person, from, to }));
 
     /// <summary>Every decision about a person's alerts, dates and arrivals, withdrawals too; sorted as above.</summary>
     public IReadOnlyList<Decision> OfPerson(string person) => Select(SelectOfPerson, new { person });
@@ -95,6 +104,8 @@ public sealed class DecisionTable
 
         public string Detail { get; init; } = "";
 
+        public LocalDate? AboutFrom { get; init; }
+
         public static Row From(Decision decision)
         {
             var detail = new DetailText(
@@ -113,6 +124,7 @@ public sealed class DecisionTable
                 Person = decision.Person,
                 Alert = decision.Kind is DecisionKind.Acknowledge or DecisionKind.Shelve ? decision.Subject : null,
                 Detail = JsonText.Write(detail),
+                AboutFrom = decision.From,
             };
         }
 

@@ -14,7 +14,7 @@ public sealed class FindingTable
         VALUES (@Person, @Date, @Rule, @About, @Severity, @Since, @Value, @LimitValue, @Unit, @Text, @Evidence)
         """;
 
-    private const string DeleteFrom = "DELETE FROM finding WHERE person = @person AND date >= @from";
+    private const string Delete = "DELETE FROM finding WHERE person = @person AND date >= @from AND date <= @to";
 
     private const string SelectOfPerson =
         $"SELECT {Columns} FROM finding WHERE person = @person AND date >= @from AND date <= @to ORDER BY date, rule, about";
@@ -26,16 +26,16 @@ public sealed class FindingTable
 
     internal FindingTable(StoreSession session) => this.session = session;
 
-    /// <summary>Stores a person's findings in place of all from a date on.</summary>
-    /// <exception cref="ArgumentException">A finding is of somebody else, or before that date.</exception>
-    public void Replace(string person, LocalDate from, IReadOnlyList<Finding> findings)
+    /// <summary>Stores a person's findings in place of all from a date on, up to another where one is given.</summary>
+    /// <exception cref="ArgumentException">A finding is of somebody else, or not among those dates.</exception>
+    public void Replace(string person, LocalDate from, IReadOnlyList<Finding> findings, LocalDate? to = null)
     {
-        if (findings.FirstOrDefault(one => one.Date < from || !string.Equals(one.Person, person, StringComparison.Ordinal)) is { } stray)
+        if (findings.FirstOrDefault(one => one.Date < from || one.Date > to || !string.Equals(one.Person, person, StringComparison.Ordinal)) is { } stray)
         {
             throw new ArgumentException($"{stray.Date} of {stray.Person} is not among the findings of {person} from {from}", nameof(findings));
         }
 
-        session.Execute(DeleteFrom, new { person, from });
+        session.Execute(Delete, new { person, from, to = to ?? LocalDate.MaxIsoValue });
         session.ExecuteEach(Insert, findings.Select(Row.From));
     }
 

@@ -24,7 +24,11 @@ public sealed class PersonStateTable
 
     private const string SelectComputed = "SELECT computed_to FROM person_state WHERE person = @person AND computed_to IS NOT NULL";
 
-    private const string SelectMarks = "SELECT person, marks FROM person_state";
+    private const string SelectBehind = """
+        SELECT person, dirty_from, computed_to, marks FROM person_state
+        WHERE dirty_from IS NOT NULL OR computed_to < @date
+        ORDER BY person
+        """;
 
     private readonly StoreSession session;
 
@@ -36,9 +40,9 @@ public sealed class PersonStateTable
     /// <summary>Whose days are to be computed again, sorted by person.</summary>
     public IReadOnlyList<DirtyPerson> Dirty() => session.Rows<Row>(SelectDirty).ConvertAll(row => new DirtyPerson(row.Person, row.DirtyFrom));
 
-    /// <summary>How often each person's days were asked for; who was never is absent.</summary>
-    public IReadOnlyDictionary<string, long> Marks() =>
-        session.Rows<MarksRow>(SelectMarks).ToDictionary(row => row.Person, row => row.Marks, StringComparer.Ordinal);
+    /// <summary>Whose days are to be computed again, or are not computed up to a date; sorted by person.</summary>
+    public IReadOnlyList<PersonBehind> Behind(LocalDate date) =>
+        session.Rows<BehindRow>(SelectBehind, new { date }).ConvertAll(row => new PersonBehind(row.Person, row.DirtyFrom, row.ComputedTo, row.Marks));
 
     /// <summary>Notes that a person's days are computed through a date. They stay dirty where somebody asked for them since their inputs were read.</summary>
     /// <param name="marks">Of the person when the inputs were read; 0 where there were none.</param>
@@ -47,9 +51,13 @@ public sealed class PersonStateTable
     /// <summary>The last date computed, or null before any.</summary>
     public LocalDate? ComputedTo(string person) => session.Row<Row>(SelectComputed, new { person })?.ComputedTo;
 
-    private sealed class MarksRow
+    private sealed class BehindRow
     {
         public string Person { get; init; } = "";
+
+        public LocalDate? DirtyFrom { get; init; }
+
+        public LocalDate? ComputedTo { get; init; }
 
         public long Marks { get; init; }
     }
@@ -66,3 +74,8 @@ public sealed class PersonStateTable
 
 /// <param name="From">The first date to compute.</param>
 public sealed record DirtyPerson(string Person, LocalDate From);
+
+/// <param name="DirtyFrom">The first date to compute again, or null.</param>
+/// <param name="ComputedTo">The last date computed, or null before any.</param>
+/// <param name="Marks">How often the days were asked for.</param>
+public sealed record PersonBehind(string Person, LocalDate? DirtyFrom, LocalDate? ComputedTo, long Marks);

@@ -97,7 +97,7 @@ public class ActivityJoinLawTests
     private static string Text(JoinResult result, LocalDate? date = null) => string.Join('\n', [
         .. result.Activities.Where(one => date is null || one.Date == date).Select(Text),
         .. result.Questions.Where(one => date is null || one.Date == date).Select(one => $"{one.Date} {one.Sentence}"),
-        .. date is null ? result.UnknownExercises : []]);
+        .. result.UnknownExercises.Where(one => date is null || one.Date == date).Select(one => $"{one.Date} {one.Word}")]);
 
     private static string Text(JoinedActivity one) => string.Join(
         ", ",

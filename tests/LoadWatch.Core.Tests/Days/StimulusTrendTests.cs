@@ -65,8 +65,8 @@ public class StimulusTrendTests
 
         Assert.Equal(RegionDay.NotCovered, legs[0]);
         Assert.Equal(RegionDay.NotCovered, legs[1]);
-        Assert.Equal(new RegionDay(false, 0, 0, 0, 0, null), legs[2]);
-        Assert.Equal(new RegionDay(false, 0, 0, 2, 2, null), legs[4]);
+        Assert.Equal(new RegionDay(false, 0, 0, 0, 0, null) { Never = true }, legs[2]);
+        Assert.Equal(new RegionDay(false, 0, 0, 2, 2, null) { Never = true }, legs[4]);
     }
 
     [Fact]

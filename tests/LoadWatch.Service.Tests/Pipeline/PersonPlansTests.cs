@@ -64,11 +64,30 @@ public sealed class PersonPlansTests : IDisposable
         Assert.Equal(["answers", "answers", "days"], plan.Rests.OrderBy(pair => pair.Key).Select(pair => pair.Value));
         Assert.True(plan.On(Today.PlusDays(14)).IsMatch);
         Assert.Equal((1, AbsenceWord.Ill), (plan.On(Today.PlusDays(8)).ReturnDay, plan.On(Today.PlusDays(7)).Absence));
-        Assert.Equivalent(plan, folder.Read((workplace, session) => new PersonPlans(workplace.Configuration).Of(session, workplace.Configuration.People["anna"])));
+        Assert.Equivalent(plan, folder.Read((workplace, session) => new PersonPlans(workplace.Configuration).Of(session, workplace.Configuration.People["anna"], Today.PlusDays(-30), Today.PlusDays(30))));
 
         folder.PutRows();
         folder.TakeUp();
         Assert.Empty(Of("anna").Absences);
+    }
+
+    /// <summary>Of equal lines the one seen later counts, also where it no longer speaks for the range.</summary>
+    [Fact]
+    public void ARangeOfDatesReadsTheLinesThatSpeakForIt()
+    {
+        Put(
+            Plan("", null, 1, new PlanRow(PlanWord.OffSeason, Today.PlusDays(20), null, null, false, null)),
+            Plan("Squad", null, 2, new PlanRow(PlanWord.TeamSession, null, null, null, true, null)),
+            Plan("other", null, 3, new PlanRow(PlanWord.LightWeek, Today.PlusDays(30), null, null, false, null)),
+            Plan("", null, 4, new PlanRow(PlanWord.LightWeek, Today.PlusDays(40), null, null, false, null)),
+            Plan("", null, 4, new PlanRow(PlanWord.LightWeek, Today.PlusDays(6), null, null, false, null)) with { Scope = "inbox/later.csv", Since = WorkingFolder.Now.Plus(Duration.FromHours(1)) });
+
+        Assert.Equal([PlanWord.OffSeason], In(10, 20));
+        Assert.Equal([PlanWord.OffSeason, PlanWord.TeamSession], In(2, 3));
+        Assert.Empty(In(21, 60));
+
+        IEnumerable<PlanWord> In(int from, int to) => folder.Read((workplace, session) => new PersonPlans(workplace.Configuration)
+            .Of(session, workplace.Configuration.People["anna"], Today.PlusDays(from), Today.PlusDays(to)).Entries.Select(entry => entry.Word).ToList());
     }
 
     private PersonPlan Of(string person) => folder.Read((workplace, session) => new PersonPlans(workplace.Configuration).Of(session)[person]);

@@ -1,5 +1,7 @@
 using LoadWatch.Days;
+using LoadWatch.Recordings;
 using LoadWatch.Stimulus;
+using NodaTime;
 
 namespace LoadWatch.Storage.Tests.Days;
 
@@ -78,6 +80,38 @@ public sealed class DayTableTests(SharedFolder shared) : StoreTest(shared)
     {
         Assert.Throws<ArgumentException>(() => Store.Write(session => session.Days.Replace("bo", Some.Date, [Some.Day(Some.Date)])));
         Assert.Throws<ArgumentException>(() => Store.Write(session => session.Days.Replace("anna", Some.Date.PlusDays(1), [Some.Day(Some.Date)])));
+    }
+
+    /// <summary>Of a brief they hold neither sessions nor what is carried; of a look-back the last holds all.</summary>
+    [Fact]
+    public void ALookBackReadsTheSessionsAndWhatTheLastDayCarries()
+    {
+        var day = Some.Day(Some.Date) with
+        {
+            Sessions = [new DaySession("a/1", "running", 80.123456789, new Dictionary<string, double> { ["distance"] = 1.0 / 3 }, new Dictionary<Channel, double> { [Channel.HeartRate] = 0.5 }, AddsLoad: true)],
+            Carried = new Carried { Sources = new Dictionary<string, LocalDate> { ["watch"] = Some.Date } },
+        };
+        Store.Write(session => session.Days.Replace("anna", Some.Date, [day, day with { Date = Some.Date.PlusDays(1) }]));
+
+        var days = Store.Read(session => session.Days.Before("anna", Some.Date.PlusDays(2)));
+
+        Assert.Equal([Some.Date, Some.Date.PlusDays(1)], days.Select(one => one.Date));
+        Assert.All(days, one => Assert.Equivalent(day.Sessions, one.Sessions));
+        Assert.Equal([Carried.Write(Carried.Nothing), Carried.Write(day.Carried)], days.Select(one => Carried.Write(one.Carried)));
+        Assert.All(Store.Read(session => session.Days.OfPerson("anna")), one => Assert.Empty(one.Sessions));
+        Assert.Empty(Store.Read(session => session.Days.Before("anna", Some.Date)));
+    }
+
+    [Fact]
+    public void AStretchIsReplacedWithoutTheDaysBehindIt()
+    {
+        Replace(0, DayState.Unknown, 0, 1, 2, 3);
+        Store.Write(session => session.Days.Replace("anna", Some.Date.PlusDays(1), [Some.Day(Some.Date.PlusDays(2)) with { State = DayState.Rest }], Some.Date.PlusDays(2)));
+
+        Assert.Equal(
+            [(Some.Date, DayState.Unknown), (Some.Date.PlusDays(2), DayState.Rest), (Some.Date.PlusDays(3), DayState.Unknown)],
+            Store.Read(session => session.Days.OfPerson("anna")).Select(day => (day.Date, day.State)));
+        Assert.Throws<ArgumentException>(() => Store.Write(session => session.Days.Replace("anna", Some.Date, [Some.Day(Some.Date.PlusDays(2))], Some.Date.PlusDays(1))));
     }
 
     private void Replace(int from, DayState state, params int[] offsets) => Store.Write(session => session.Days.Replace(

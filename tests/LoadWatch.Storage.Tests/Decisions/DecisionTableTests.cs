@@ -47,6 +47,21 @@ public sealed class DecisionTableTests(SharedFolder shared) : StoreTest(shared)
         Assert.Equal([Seen], Store.Read(session => session.Decisions.All()));
     }
 
+    [Fact]
+    public void OfARangeOfDatesEveryAbsenceIsReadAndRestAndMatchesThatBeginInIt()
+    {
+        var withdrawn = Dated(DecisionKind.Rest, 3) with { From = Some.Date.PlusDays(1) };
+        Add(
+            Dated(DecisionKind.Ill, 0) with { From = Some.Date.PlusDays(-900) },
+            Dated(DecisionKind.Rest, 1) with { From = Some.Date.PlusDays(-1) },
+            Dated(DecisionKind.Match, 2) with { From = Some.Date },
+            withdrawn,
+            new Decision(DecisionKind.Withdraw, withdrawn.Id, "anna", Some.Moment + Duration.FromHours(1), null, null),
+            Seen);
+
+        Assert.Equal([DecisionKind.Ill, DecisionKind.Match], Store.Read(session => session.Decisions.OfDates("anna", Some.Date, Some.Date.PlusDays(2))).Select(decision => decision.Kind));
+    }
+
     [Theory]
     [InlineData(DecisionKind.Ill)]
     [InlineData(DecisionKind.Injured)]

@@ -24,7 +24,7 @@ public sealed class PersonStateTableTests(SharedFolder shared) : StoreTest(share
         Mark("anna", 1);
         Assert.Null(Store.Read(session => session.People.ComputedTo("anna")));
 
-        Store.Write(session => session.People.Computed("anna", Some.Date.PlusDays(9), session.People.Marks()["anna"]));
+        Store.Write(session => session.People.Computed("anna", Some.Date.PlusDays(9), session.People.Behind(Some.Date)[0].Marks));
         Assert.Empty(Store.Read(session => session.People.Dirty()));
 
         Mark("anna", 5);
@@ -36,12 +36,24 @@ public sealed class PersonStateTableTests(SharedFolder shared) : StoreTest(share
     public void WhoIsMarkedWhileTheDaysAreComputedStaysDirty()
     {
         Mark("anna", 5);
-        var marks = Store.Read(session => session.People.Marks());
+        var marks = Store.Read(session => session.People.Behind(Some.Date))[0].Marks;
         Mark("anna", 7);
 
-        Store.Write(session => session.People.Computed("anna", Some.Date.PlusDays(9), marks["anna"]));
+        Store.Write(session => session.People.Computed("anna", Some.Date.PlusDays(9), marks));
 
         Assert.Equal([new DirtyPerson("anna", Some.Date.PlusDays(5))], Store.Read(session => session.People.Dirty()));
+    }
+
+    [Fact]
+    public void WhoIsAskedForOrComputedNotFarEnoughIsBehind()
+    {
+        Store.Write(session => session.People.Computed("bo", Some.Date.PlusDays(8), marks: 0));
+        Store.Write(session => session.People.Computed("cara", Some.Date.PlusDays(9), marks: 0));
+        Mark("anna", 2);
+
+        Assert.Equal(
+            [new PersonBehind("anna", Some.Date.PlusDays(2), null, 1), new PersonBehind("bo", null, Some.Date.PlusDays(8), 0)],
+            Store.Read(session => session.People.Behind(Some.Date.PlusDays(9))));
     }
 
     private void Mark(string person, int offset) => Store.Write(session => session.People.MarkDirty(person, Some.Date.PlusDays(offset)));

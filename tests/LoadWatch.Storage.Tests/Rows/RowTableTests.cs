@@ -54,6 +54,18 @@ public sealed class RowTableTests(SharedFolder shared) : StoreTest(shared)
     }
 
     [Fact]
+    public void ReferenceValuesStandUntilTheNextOneAndFunctionTestsDoNot()
+    {
+        Store.Write(session => session.TableRows.Put([
+            Row("t", "anna", RowKind.Tests, new TestRow("heart_rate_max", 188, null, null, null, null, null, null, null), 0),
+            Row("u", "anna", RowKind.Tests, new TestRow("gait_speed", 1.1, null, null, null, null, null, null, null), 0) with { Key = "gait", Date = Date.PlusDays(9) },
+        ]));
+
+        Assert.Equal(["heart_rate_max"], Store.Read(session => session.TableRows.StandingOf("anna", RowKind.Tests)).Select(row => ((TestRow)row.Content).Test));
+        Assert.Equal(["gait_speed"], Store.Read(session => session.TableRows.OfPerson("anna", RowKind.Tests, Date.PlusDays(9), Date.PlusDays(9))).Select(row => ((TestRow)row.Content).Test));
+    }
+
+    [Fact]
     public void ARemovedRowIsGone()
     {
         Store.Write(session =>

@@ -3,10 +3,10 @@ using System.Text.Json.Serialization;
 using NodaTime;
 using NodaTime.Text;
 
-namespace LoadWatch.Storage.Dialects;
+namespace LoadWatch;
 
 /// <summary>Dates and times of day in JSON text by their ISO form: the serializer would write every part of them and read none.</summary>
-internal sealed class JsonDates<T>(IPattern<T> pattern) : JsonConverter<T>
+public sealed class JsonDates<T>(IPattern<T> pattern) : JsonConverter<T>
     where T : struct
 {
     public override T Read(ref Utf8JsonReader reader, Type typeToConvert, JsonSerializerOptions options)

@@ -1,0 +1,14 @@
+namespace LoadWatch.Days;
+
+/// <summary>The load of a date from those of its sessions.</summary>
+internal static class DayLoad
+{
+    /// <summary>0 for rest; null when unknown or when one of the sessions that add load has none: a part of a day is not the day.</summary>
+    /// <param name="adding">Loads of the sessions that add to the date, in key order, so that the sum does not hang on theirs (I-5).</param>
+    public static double? Of(DayState state, IReadOnlyList<double?> adding) => state switch
+    {
+        DayState.Rest => 0,
+        DayState.Recorded when adding.Count > 0 && adding.All(load => load.HasValue) => Significant.Round(adding.Sum(load => load!.Value)),
+        _ => null,
+    };
+}
