@@ -48,6 +48,7 @@ public static class DurableFile
             file.Flush(flushToDisk: true);
         }
 
+        KillPoint.Pass("replaced");
         File.Move(aside, path, overwrite: true);
     }
 
