@@ -110,7 +110,7 @@ public sealed class Nights
         var stranger = TrueSession.Make("anna", yesterday.PlusDays(-9), Noon, clock.TimeZone, random);
         Add("nobody.fit", Files.Fit(stranger), Truth.Held);
         Add("anna/cut.fit", Files.Fit(TrueSession.Make("anna", yesterday.PlusDays(-10), Noon, clock.TimeZone, random))[..^9], Truth.Refused);
-        Add("anna/notes.txt", Files.Text("felt fine\n"), Truth.Aside);
+        Add("anna/notes.txt", Files.Text("felt fine\n"), Truth.Refused);
     }
 
     private void AddTables()

@@ -1,5 +1,6 @@
 using LoadWatch.Chaos.Inputs;
 using LoadWatch.Chaos.Processes;
+using Microsoft.Data.Sqlite;
 using NodaTime;
 
 namespace LoadWatch.Chaos.Places;
@@ -7,10 +8,11 @@ namespace LoadWatch.Chaos.Places;
 /// <summary>How a place is configured.</summary>
 /// <param name="Take"><c>leave</c> or <c>move</c>.</param>
 /// <param name="Mail">The inside of the section <c>mail</c>, or null for a place without mail.</param>
-public sealed record PlaceOptions(string Take = "leave", string? Mail = null)
+/// <param name="Contacts">How many are told, each with an address where there is mail.</param>
+public sealed record PlaceOptions(string Take = "leave", string? Mail = null, int Contacts = 1)
 {
-    /// <summary>Of the only contact.</summary>
-    public const string Address = "ada@example.org";
+    /// <summary>The address of a contact, from 0.</summary>
+    public static string Address(int contact) => FormattableString.Invariant($"staff{contact}@example.org");
 }
 
 /// <summary>A temporary working folder as a user has it: configuration, roster, anchors, an inbox. Deleted by its exact path.</summary>
@@ -128,20 +130,39 @@ public sealed class Place : IDisposable
         return ended.Code == 0 ? ended : throw new ChaosFailureException($"ended with {ended.Code}: {ended.Said}");
     }
 
+    /// <summary>Lets a delivery that waits for its next attempt be due at once; the only thing that is ever written into a store, and only where nothing runs.</summary>
+    public void SkipWaits() => Write("UPDATE delivery SET next_attempt = NULL WHERE state = 'pending'");
+
+    /// <summary>Lets the first attempt of what waits lie as far back as if that time had gone by; only where nothing runs.</summary>
+    public void AgeWaits(Duration time) =>
+        Write($"UPDATE delivery SET next_attempt = NULL, first_attempt = '{Text(Clock.Now - time)[..^1]}.000000000Z' WHERE state = 'pending'");
+
     public void Dispose() => root.Delete(recursive: true);
+
+    private void Write(string sql)
+    {
+        using var connection = new SqliteConnection(new SqliteConnectionStringBuilder { DataSource = DatabasePath, Pooling = false }.ConnectionString);
+        connection.Open();
+        using var command = connection.CreateCommand();
+#pragma warning disable CA2100 // The texts stand above.
+        command.CommandText = sql;
+#pragma warning restore CA2100
+        command.ExecuteNonQuery();
+    }
 
     private static string Text(Instant instant) => NodaTime.Text.InstantPattern.General.Format(instant);
 
     private static string Configuration(Clock clock, PlaceOptions options)
     {
         var mail = options.Mail is null ? "" : $",\n  \"mail\": {{ {options.Mail} }}";
-        var address = options.Mail is null ? "" : $", \"mail\": \"{PlaceOptions.Address}\"";
+        var contacts = Enumerable.Range(0, options.Contacts).Select(number =>
+            $"{{ \"id\": \"staff{number}\", \"name\": \"Staff {number}\", \"groups\": [\"squad\"], \"brief_at\": \"05:00\"{(options.Mail is null ? "" : $", \"mail\": \"{PlaceOptions.Address(number)}\"")} }}");
         return $$"""
             {
               "time_zone": "{{clock.Zone}}",
               "inboxes": [{ "name": "inbox", "path": "inbox", "take": "{{options.Take}}" }],
               "groups": [{ "id": "squad", "name": "Squad" }],
-              "contacts": [{ "id": "staff", "name": "Staff", "groups": ["squad"], "brief_at": "05:00"{{address}} }],
+              "contacts": [{{string.Join(", ", contacts)}}],
               "intake": { "scan_seconds": 5 }{{mail}}
             }
 

@@ -69,12 +69,20 @@ public sealed class Trial(Binary binary, int seed, bool isLong)
     }
 
     /// <summary>Puts before a failure at which disturbance it came.</summary>
-    public static void Named(string disturbance, Action check)
+    public static void Named(string disturbance, Action check) =>
+        Named(disturbance, () =>
+        {
+            check();
+            return true;
+        });
+
+    /// <inheritdoc cref="Named(string, Action)"/>
+    public static T Named<T>(string disturbance, Func<T> check)
     {
         ArgumentNullException.ThrowIfNull(check);
         try
         {
-            check();
+            return check();
         }
         catch (ChaosFailureException failure)
         {
