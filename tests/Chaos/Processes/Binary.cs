@@ -29,7 +29,7 @@ public sealed record Binary(IReadOnlyList<string> Words)
             string[] words =
             [
                 "publish", Path.Combine(sources, "src", "LoadWatch.Service"), "-c", "Release", "-r", "linux-x64", "--no-self-contained", "-v", "quiet",
-                $"-p:PublishReadyToRun={ahead}", "-p:RestorePackagesWithLockFile=false", "-o", Path.Combine(folder, "loadwatch"),
+                $"-p:PublishReadyToRun={ahead}", "-p:RestorePackagesWithLockFile=false", "-p:RestoreLockedMode=false", "-o", Path.Combine(folder, "loadwatch"),
             ];
             using var build = Process.Start(new ProcessStartInfo("dotnet", words) { RedirectStandardOutput = true, UseShellExecute = false })!;
             said = build.StandardOutput.ReadToEnd();

@@ -14,22 +14,11 @@ internal sealed class Published : IDisposable
         else
         {
             folder = Directory.CreateTempSubdirectory("loadwatch-published-");
-            Binary = Binary.Publish(Repository(), folder.FullName);
+            Binary = Binary.Publish(Repository.Root ?? throw new ChaosFailureException("the sources are not above this program: name an executable with --binary"), folder.FullName);
         }
     }
 
     public Binary Binary { get; }
 
     public void Dispose() => folder?.Delete(recursive: true);
-
-    private static string Repository()
-    {
-        var at = new DirectoryInfo(AppContext.BaseDirectory);
-        while (at is not null && !File.Exists(Path.Combine(at.FullName, "LoadWatch.sln")))
-        {
-            at = at.Parent;
-        }
-
-        return at?.FullName ?? throw new ChaosFailureException("the sources are not above this program: name an executable with --binary");
-    }
 }
