@@ -43,10 +43,7 @@ public static class FailingCalls
         Parallel.For(0, Workers, Trial.TwoAtOnce, _ =>
         {
             using var desk = MailDesk.Open(trial, take: "move");
-            while (work.Next() is { } fault)
-            {
-                Trial.Named($"{fault.Kind} at {fault.Call} {fault.Number}", () => Disturb(trial, desk, fault));
-            }
+            work.Each(fault => Trial.Named($"{fault.Kind} at {fault.Call} {fault.Number}", () => Disturb(trial, desk, fault)));
         });
     }
 
