@@ -1,4 +1,5 @@
 using LoadWatch.Service.Configuration;
+using LoadWatch.Storage;
 using LoadWatch.Storage.Files;
 
 namespace LoadWatch.Service.Arrivals;
@@ -50,6 +51,7 @@ public static class InboxRemoval
                 return false;
             }
 
+            KillPoint.Pass("aside");
             if (SafeFile.StampOf(aside) == file.Stamp)
             {
                 File.Delete(aside);

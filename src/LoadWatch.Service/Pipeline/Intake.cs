@@ -38,7 +38,12 @@ public sealed class Intake(
         var taken = new List<TakenFile>();
         try
         {
-            taken.AddRange(group.Select(taker.Take).OfType<TakenFile>());
+            foreach (var file in group.Select(taker.Take).OfType<TakenFile>())
+            {
+                taken.Add(file);
+                KillPoint.Pass("staged");
+            }
+
             return taken;
         }
         catch

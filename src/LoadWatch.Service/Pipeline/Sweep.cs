@@ -83,6 +83,7 @@ public sealed class Sweep
             .Distinct(StringComparer.Ordinal)
             .ToList();
         var through = store.Write(EmptyDerived);
+        KillPoint.Pass("emptied");
         var done = 0;
         foreach (var piece in objects.SelectMany(sha => Kept(sha, () => progress?.Invoke(++done, objects.Count))).InPieces())
         {

@@ -42,6 +42,7 @@ public sealed class Archive(DataFolder folder)
         foreach (var copy in copies)
         {
             Place(copy);
+            KillPoint.Pass("placed");
         }
 
         // Also where the object was here before: the run that placed it may have died before this line.

@@ -63,6 +63,7 @@ public static class DurableFile
             file.Write(bytes);
         }
 
+        KillPoint.Pass("replaced");
         File.Move(aside, path, overwrite: true);
     }
 
