@@ -1,0 +1,86 @@
+using LoadWatch.Service.Commands;
+using LoadWatch.Service.Health;
+using LoadWatch.Service.Schedule;
+using LoadWatch.Service.Tests.Pipeline;
+using Microsoft.Extensions.DependencyInjection;
+
+namespace LoadWatch.Service.Tests.Nights;
+
+/// <summary>
+/// The job of the service, night after night in one process over one open store, as <c>run</c> does it: configuration read anew, sweep, log, status file. Only the
+/// clock is moved by hand. Looks every ten nights at what the process holds.
+/// </summary>
+public sealed class NightlyService : IDisposable
+{
+    /// <summary>The first year is for caches, pools and compiled code to come to their size.</summary>
+    private const int FirstSample = TwoYears.Nights - 365;
+
+    private const int BetweenSamples = 10;
+
+    public NightlyService()
+    {
+        Folder = TwoYears.Folder();
+        var terminal = Console.Out;
+        Console.SetOut(TextWriter.Null);
+        try
+        {
+            Run();
+        }
+        finally
+        {
+            Console.SetOut(terminal);
+        }
+    }
+
+    public IReadOnlyList<Holding> Samples { get; private set; } = [];
+
+    public long LargestWalBytes { get; private set; }
+
+    public long LogBytes { get; private set; }
+
+    /// <summary>The working folder after the last night.</summary>
+    internal WorkingFolder Folder { get; }
+
+    public void Dispose() => Folder.Dispose();
+
+    private void Run()
+    {
+        var files = TwoYears.ByNight();
+        var samples = new List<Holding>();
+        using (var workplace = Workplace.OpenToWork(Folder.ConfigPath))
+        using (var host = ServiceHost.Build(workplace, Folder.ConfigPath))
+        {
+            var clock = new HandClock();
+            var job = ActivatorUtilities.CreateInstance<SweepJob>(host.Services, clock);
+            for (var night = 0; night < TwoYears.Nights; night++)
+            {
+                Folder.Fill(files[night]);
+                clock.Now = TwoYears.Morning(night).ToDateTimeOffset();
+                var done = job.Execute(null!, CancellationToken.None);
+                Assert.True(done.IsCompletedSuccessfully && StatusFile.Read(Folder.Data) is { Done: true, Unreadable: 0 }, $"night {night} failed");
+                LargestWalBytes = Math.Max(LargestWalBytes, new FileInfo(Path.Combine(Folder.Data, "loadwatch.db-wal")).Length);
+                if (night >= FirstSample && night % BetweenSamples == 0)
+                {
+                    samples.Add(Holding.Now(night));
+                }
+            }
+        }
+
+        Samples = samples;
+        LogBytes = WorkingFolder.Files(Path.Combine(Folder.Data, "log")).Sum(path => new FileInfo(path).Length);
+    }
+
+    private sealed class HandClock : TimeProvider
+    {
+        public DateTimeOffset Now { get; set; }
+
+        public override DateTimeOffset GetUtcNow() => Now;
+    }
+}
+
+/// <summary>The nights measure the process, so nothing else runs beside them.</summary>
+[CollectionDefinition(Name, DisableParallelization = true)]
+public sealed class NightlyCollection : ICollectionFixture<NightlyService>
+{
+    public const string Name = "two years of nights";
+}
