@@ -31,6 +31,10 @@ internal sealed class ActivityRow : RecordingRow
 
     public string Remarks { get; init; } = "";
 
+    public string Quantities { get; init; } = "";
+
+    public string Stimulus { get; init; } = "";
+
     public static ActivityRow From(StoredActivity activity) => new()
     {
         Key = activity.Key,
@@ -46,9 +50,11 @@ internal sealed class ActivityRow : RecordingRow
         UsableShare = JsonText.WriteSorted(activity.Values.UsableShare),
         TimesInZone = JsonText.Write(activity.Values.TimesInZone),
         Remarks = JsonText.Write(activity.Values.Remarks),
+        Quantities = JsonText.Write(activity.Values.Quantities),
+        Stimulus = JsonText.Write(activity.Values.Stimulus),
     };
 
-    public StoredActivity ToActivity(IEnumerable<Quantity> quantities, IEnumerable<RegionStimulus> stimulus)
+    public StoredActivity ToActivity()
     {
         var values = new ActivityValues
         {
@@ -59,8 +65,8 @@ internal sealed class ActivityRow : RecordingRow
             UsableShare = JsonText.Read<Dictionary<Channel, double>>(UsableShare),
             TimesInZone = JsonText.Read<List<TimeInZone>>(TimesInZone),
             Remarks = JsonText.Read<List<string>>(Remarks),
-            Quantities = [.. quantities.OrderBy(quantity => quantity.Name, StringComparer.Ordinal)],
-            Stimulus = [.. stimulus.OrderBy(region => region.Region)],
+            Quantities = JsonText.Read<List<Quantity>>(Quantities),
+            Stimulus = JsonText.Read<List<RegionStimulus>>(Stimulus),
         };
         return new StoredActivity(ToRecording(), values, JsonText.Read<List<string>>(Recordings));
     }

@@ -6,47 +6,29 @@ using NodaTime;
 
 namespace LoadWatch.Storage.Activities;
 
-/// <summary>Tables <c>activity</c>, <c>histogram</c>, <c>quantity</c> and <c>stimulus</c>: what counts, and what was computed of it.</summary>
+/// <summary>Tables <c>activity</c> and <c>histogram</c>: what counts, and what was computed of it. An activity is one row, so that a year is some hundred.</summary>
 public sealed class ActivityTable
 {
     private const string Insert = """
         INSERT INTO activity (
             key, sha, part, person, date, recordings, heart_rate_mean_bpm, heart_rate_max_bpm,
-            power_mean_watts, power_max_watts, usable_share, times_in_zone, remarks)
+            power_mean_watts, power_max_watts, usable_share, times_in_zone, remarks, quantities, stimulus)
         VALUES (
             @Key, @Sha, @Part, @Person, @Date, @Recordings, @HeartRateMeanBpm, @HeartRateMaxBpm,
-            @PowerMeanWatts, @PowerMaxWatts, @UsableShare, @TimesInZone, @Remarks)
+            @PowerMeanWatts, @PowerMaxWatts, @UsableShare, @TimesInZone, @Remarks, @Quantities, @Stimulus)
         """;
 
     private const string InsertHistogram = "INSERT INTO histogram (activity, channel, bins) VALUES (@activity, @channel, @bins)";
 
-    private const string InsertQuantity =
-        "INSERT INTO quantity (activity, name, value, unit, estimated) VALUES (@Activity, @Name, @Value, @Unit, @Estimated)";
-
-    private const string InsertStimulus = """
-        INSERT INTO stimulus (
-            activity, region, grade, channel, hard_bouts_low, hard_bouts_mid, hard_bouts_high,
-            hard_repetitions_low, hard_repetitions_mid, hard_repetitions_high, hard_sets,
-            slow_seconds_low, slow_seconds_mid, slow_seconds_high, medium_seconds_low, medium_seconds_mid, medium_seconds_high,
-            large_seconds_low, large_seconds_mid, large_seconds_high, not_seen)
-        VALUES (
-            @Activity, @Region, @Grade, @Channel, @HardBoutsLow, @HardBoutsMid, @HardBoutsHigh,
-            @HardRepetitionsLow, @HardRepetitionsMid, @HardRepetitionsHigh, @HardSets,
-            @SlowSecondsLow, @SlowSecondsMid, @SlowSecondsHigh, @MediumSecondsLow, @MediumSecondsMid, @MediumSecondsHigh,
-            @LargeSecondsLow, @LargeSecondsMid, @LargeSecondsHigh, @NotSeen)
-        """;
-
-    // The rows of the other tables go with it.
+    // Its histograms go with it.
     private const string Delete = "DELETE FROM activity WHERE key = @key";
 
     private const string SelectActivities = """
         SELECT r.*, a.key, a.date, a.recordings, a.heart_rate_mean_bpm, a.heart_rate_max_bpm,
-            a.power_mean_watts, a.power_max_watts, a.usable_share, a.times_in_zone, a.remarks
+            a.power_mean_watts, a.power_max_watts, a.usable_share, a.times_in_zone, a.remarks, a.quantities, a.stimulus
         FROM activity a JOIN recording r ON r.sha = a.sha AND r.part = a.part
         """;
 
-    private const string SelectQuantities = "SELECT t.* FROM quantity t JOIN activity a ON a.key = t.activity";
-    private const string SelectStimulus = "SELECT t.* FROM stimulus t JOIN activity a ON a.key = t.activity";
     private const string InDates = " WHERE a.date >= @from AND a.date <= @to";
     private const string OfPersonInDates = InDates + " AND a.person = @person";
     private const string SelectHistogram = "SELECT bins FROM histogram WHERE activity = @key AND channel = @channel";
@@ -61,8 +43,6 @@ public sealed class ActivityTable
         Remove(activity.Key);
         session.Execute(Insert, ActivityRow.From(activity));
         session.ExecuteEach(InsertHistogram, HistogramRows(activity));
-        session.ExecuteEach(InsertQuantity, activity.Values.Quantities.Select(quantity => QuantityRow.From(activity.Key, quantity)));
-        session.ExecuteEach(InsertStimulus, activity.Values.Stimulus.Select(stimulus => StimulusRow.From(activity.Key, stimulus)));
     }
 
     /// <summary>Removes an activity; nothing when there is none.</summary>
@@ -85,13 +65,6 @@ public sealed class ActivityTable
             .OrderBy(pair => pair.Key)
             .Select(pair => new { activity = activity.Key, channel = Words<Channel>.Of(pair.Key), bins = HistogramCodec.Write(pair.Value) });
 
-    private List<StoredActivity> Select(string where, object values)
-    {
-        var quantities = session.Rows<QuantityRow>(SelectQuantities + where, values)
-            .ToLookup(row => row.Activity, row => row.ToQuantity(), StringComparer.Ordinal);
-        var stimulus = session.Rows<StimulusRow>(SelectStimulus + where, values)
-            .ToLookup(row => row.Activity, row => row.ToStimulus(), StringComparer.Ordinal);
-        return session.Rows<ActivityRow>(SelectActivities + where + " ORDER BY a.date, r.start, a.key", values)
-            .ConvertAll(row => row.ToActivity(quantities[row.Key], stimulus[row.Key]));
-    }
+    private List<StoredActivity> Select(string where, object values) =>
+        session.Rows<ActivityRow>(SelectActivities + where + " ORDER BY a.date, r.start, a.key", values).ConvertAll(row => row.ToActivity());
 }

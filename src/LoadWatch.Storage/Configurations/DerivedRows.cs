@@ -15,8 +15,6 @@ public sealed class DerivedRows
         "DELETE FROM finding",
         "DELETE FROM day",
         "DELETE FROM person_state",
-        "DELETE FROM stimulus",
-        "DELETE FROM quantity",
         "DELETE FROM histogram",
         "DELETE FROM activity",
         "DELETE FROM recording",

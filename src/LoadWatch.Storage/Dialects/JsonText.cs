@@ -13,6 +13,7 @@ internal static class JsonText
     private static readonly JsonSerializerOptions Options = new()
     {
         PropertyNamingPolicy = JsonNamingPolicy.SnakeCaseLower,
+        IgnoreReadOnlyProperties = true,
         Encoder = JavaScriptEncoder.Create(UnicodeRanges.All),
         Converters =
         {

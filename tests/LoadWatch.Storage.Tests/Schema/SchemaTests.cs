@@ -34,7 +34,7 @@ public sealed class SchemaTests(SharedFolder shared) : StoreTest(shared)
     [Fact]
     public void EveryCommandOfTheScriptsIsOneStatement()
     {
-        Assert.Equal(5, SqliteSchema.Scripts.Count);
+        Assert.NotEmpty(SqliteSchema.Scripts);
         foreach (var name in SqliteSchema.Scripts)
         {
             using var script = new StreamReader(typeof(Store).Assembly.GetManifestResourceStream(name)!);
