@@ -4,7 +4,7 @@ using LoadWatch.Recordings;
 using LoadWatch.Service.Tests.Pipeline;
 using NodaTime;
 
-namespace LoadWatch.Service.Tests.Nights;
+namespace LoadWatch.Service.Tests.Endurance;
 
 /// <summary>
 /// Two years of three people as files come in, night by night: FIT of one and of two devices, an export of several people a week, a set log that grows every

@@ -4,7 +4,7 @@ using LoadWatch.Service.Schedule;
 using LoadWatch.Service.Tests.Pipeline;
 using Microsoft.Extensions.DependencyInjection;
 
-namespace LoadWatch.Service.Tests.Nights;
+namespace LoadWatch.Service.Tests.Endurance;
 
 /// <summary>
 /// The job of the service, night after night in one process over one open store, as <c>run</c> does it: configuration read anew, sweep, log, status file. Only the
@@ -80,7 +80,7 @@ public sealed class NightlyService : IDisposable
 
 /// <summary>The nights measure the process, so nothing else runs beside them.</summary>
 [CollectionDefinition(Name, DisableParallelization = true)]
-public sealed class NightlyCollection : ICollectionFixture<NightlyService>
+public sealed class Nightly : ICollectionFixture<NightlyService>
 {
     public const string Name = "two years of nights";
 }

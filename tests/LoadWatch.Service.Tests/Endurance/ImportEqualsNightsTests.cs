@@ -1,13 +1,13 @@
 using LoadWatch.Service.Tests.Metamorphic;
 using LoadWatch.Service.Tests.Pipeline;
 
-namespace LoadWatch.Service.Tests.Nights;
+namespace LoadWatch.Service.Tests.Endurance;
 
 /// <summary>
 /// Two years taken in at once and as of today equal the same two years taken in night by night: days and findings of every date. So do the alerts that stand,
 /// but for when they were raised: an import replays no history, so it raises what stands on the day it ends.
 /// </summary>
-[Collection(NightlyCollection.Name)]
+[Collection(Nightly.Name)]
 public sealed class ImportEqualsNightsTests(NightlyService nights) : IDisposable
 {
     private readonly WorkingFolder import = TwoYears.Folder();

@@ -1,7 +1,7 @@
-namespace LoadWatch.Service.Tests.Nights;
+namespace LoadWatch.Service.Tests.Endurance;
 
 /// <summary>A service that runs for years holds no more in the second than in the first.</summary>
-[Collection(NightlyCollection.Name)]
+[Collection(Nightly.Name)]
 public sealed class EnduranceTests(NightlyService nights)
 {
     private const double Mega = 1024 * 1024;

@@ -1,6 +1,6 @@
 using System.Diagnostics;
 
-namespace LoadWatch.Service.Tests.Nights;
+namespace LoadWatch.Service.Tests.Endurance;
 
 /// <summary>What this process holds after everything that can be collected was.</summary>
 /// <param name="ManagedMegabytes">Live objects.</param>
