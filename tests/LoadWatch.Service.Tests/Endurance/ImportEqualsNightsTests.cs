@@ -4,20 +4,20 @@ using LoadWatch.Service.Tests.Pipeline;
 namespace LoadWatch.Service.Tests.Endurance;
 
 /// <summary>
-/// Two years taken in at once and as of today equal the same two years taken in night by night: days and findings of every date. So do the alerts that stand,
+/// A history taken in at once and as of today equals the same files taken in night by night: days and findings of every date. So do the alerts that stand,
 /// but for when they were raised: an import replays no history, so it raises what stands on the day it ends.
 /// </summary>
 [Collection(Nightly.Name)]
 public sealed class ImportEqualsNightsTests(NightlyService nights) : IDisposable
 {
-    private readonly WorkingFolder import = TwoYears.Folder();
+    private readonly WorkingFolder import = Season.Folder();
 
     public void Dispose() => import.Dispose();
 
     [Fact]
     public void DaysFindingsAndStandingAlertsAreTheSame()
     {
-        foreach (var night in TwoYears.ByNight().OrderBy(night => night.Key))
+        foreach (var night in Season.ByNight().OrderBy(night => night.Key))
         {
             import.Fill(night);
         }

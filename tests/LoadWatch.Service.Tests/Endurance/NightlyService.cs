@@ -12,14 +12,14 @@ namespace LoadWatch.Service.Tests.Endurance;
 /// </summary>
 public sealed class NightlyService : IDisposable
 {
-    /// <summary>The first year is for caches, pools and compiled code to come to their size.</summary>
-    private const int FirstSample = TwoYears.Nights - 365;
+    /// <summary>The nights before the last year are for caches, pools and compiled code to come to their size.</summary>
+    private static readonly int FirstSample = Season.Nights - 365;
 
     private const int BetweenSamples = 10;
 
     public NightlyService()
     {
-        Folder = TwoYears.Folder();
+        Folder = Season.Folder();
         var terminal = Console.Out;
         Console.SetOut(TextWriter.Null);
         try
@@ -45,17 +45,17 @@ public sealed class NightlyService : IDisposable
 
     private void Run()
     {
-        var files = TwoYears.ByNight();
+        var files = Season.ByNight();
         var samples = new List<Holding>();
         using (var workplace = Workplace.OpenToWork(Folder.ConfigPath))
         using (var host = ServiceHost.Build(workplace, Folder.ConfigPath))
         {
             var clock = new HandClock();
             var job = ActivatorUtilities.CreateInstance<SweepJob>(host.Services, clock);
-            for (var night = 0; night < TwoYears.Nights; night++)
+            for (var night = 0; night < Season.Nights; night++)
             {
                 Folder.Fill(files[night]);
-                clock.Now = TwoYears.Morning(night).ToDateTimeOffset();
+                clock.Now = Season.Morning(night).ToDateTimeOffset();
                 var done = job.Execute(null!, CancellationToken.None);
                 Assert.True(done.IsCompletedSuccessfully && StatusFile.Read(Folder.Data) is { Done: true, Unreadable: 0 }, $"night {night} failed");
                 LargestWalBytes = Math.Max(LargestWalBytes, new FileInfo(Path.Combine(Folder.Data, "loadwatch.db-wal")).Length);
@@ -82,5 +82,5 @@ public sealed class NightlyService : IDisposable
 [CollectionDefinition(Name, DisableParallelization = true)]
 public sealed class Nightly : ICollectionFixture<NightlyService>
 {
-    public const string Name = "two years of nights";
+    public const string Name = "nights of a service";
 }

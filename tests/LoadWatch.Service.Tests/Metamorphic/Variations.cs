@@ -62,8 +62,9 @@ internal static class Variations
             return Elsewhere(file, random);
         }
 
+        // A folder goes before a file name, so two claims are two only where both are made by folders.
         var others = OtherNames[file.Owner];
-        return random.Next(4) switch
+        return random.Next(file.Name.StartsWith("claimed", StringComparison.Ordinal) ? 2 : 4) switch
         {
             0 => $"{file.Owner.ToUpperInvariant()}/{file.Name}",
             1 => $"2026/{file.Owner[..1].ToUpperInvariant()}{file.Owner[1..]}/spring/{file.Name}",

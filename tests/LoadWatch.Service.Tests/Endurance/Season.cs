@@ -7,12 +7,16 @@ using NodaTime;
 namespace LoadWatch.Service.Tests.Endurance;
 
 /// <summary>
-/// Two years of three people as files come in, night by night: FIT of one and of two devices, an export of several people a week, a set log that grows every
+/// Sixteen months of three people, or as many nights as LOADWATCH_NIGHTS says, as files come in, night by night: FIT of one and of two devices, an export of several people a week, a set log that grows every
 /// week and is sent whole, a plan. Heavy blocks, breaks and late files among them, so that every kind of look-back has something to find.
 /// </summary>
-internal static class TwoYears
+internal static class Season
 {
-    public const int Nights = 730;
+    /// <summary>More than the longest look-back.</summary>
+    private const int Usual = 500;
+
+    public static readonly int Nights = int.Parse(
+        Environment.GetEnvironmentVariable("LOADWATCH_NIGHTS") ?? Usual.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
 
     private static readonly LocalDate First = Some.Yesterday.PlusDays(1 - Nights);
 
