@@ -50,6 +50,11 @@ internal sealed class RowCount : IDisposable
                 _ = Trace(handle, Rows, callback, 0);
             }
         }
+
+        if (watched.Count == 0)
+        {
+            throw new InvalidOperationException("the store's connections are not where they were looked for");
+        }
     }
 
     /// <summary>The store keeps them to itself.</summary>
