@@ -38,7 +38,8 @@ public sealed class EnduranceTests(NightlyService nights)
     public void TheWriteAheadLogAndTheServiceLogStaySmall()
     {
         Assert.InRange(nights.LargestWalBytes / Mega, 0.001, 16);
-        Assert.InRange(nights.LogBytes / (double)Season.Nights, 1, 2000);
+        Assert.InRange(nights.Log.Length / (double)Season.Nights, 1, 2000);
+        Assert.DoesNotContain("\"@l\":\"Error\"", nights.Log, StringComparison.Ordinal);
     }
 
     private double Growth(Func<Holding, double> value) => Holding.GrowthPer100Nights(nights.Samples, value);
