@@ -37,7 +37,7 @@ public sealed class ImportEqualsNightsTests(NightlyService nights) : IDisposable
     {
         var findings = import.Export("findings");
         Assert.All(
-            ["load_ratio", "weekly_jump", "session_spike", "silence", "stimulus_gap", "falling_load"],
+            ["load_ratio", "weekly_jump", "silence", "stimulus_gap", "falling_load"],
             rule => Assert.Contains($"\"rule\":\"{rule}\"", findings, StringComparison.Ordinal));
         Assert.NotEmpty(Digest.Standing(import));
         Assert.NotEqual(import.Export("alerts"), nights.Folder.Export("alerts"));

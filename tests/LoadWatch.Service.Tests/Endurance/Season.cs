@@ -7,13 +7,12 @@ using NodaTime;
 namespace LoadWatch.Service.Tests.Endurance;
 
 /// <summary>
-/// Sixteen months of three people, or as many nights as LOADWATCH_NIGHTS says, as files come in, night by night: FIT of one and of two devices, an export of several people a week, a set log that grows every
+/// Two years of three people, or as many nights as LOADWATCH_NIGHTS says, as files come in, night by night: FIT of one and of two devices, an export of several people a week, a set log that grows every
 /// week and is sent whole, a plan. Heavy blocks, breaks and late files among them, so that every kind of look-back has something to find.
 /// </summary>
 internal static class Season
 {
-    /// <summary>More than the longest look-back.</summary>
-    private const int Usual = 500;
+    private const int Usual = 730;
 
     public static readonly int Nights = int.Parse(
         Environment.GetEnvironmentVariable("LOADWATCH_NIGHTS") ?? Usual.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
@@ -88,7 +87,7 @@ internal static class Season
         var week => 8 + (6 * week) + (day / 28 % 5 == 3 ? 22 : 0),
     };
 
-    /// <summary>A minute; the harder, the longer.</summary>
+    /// <summary>A minute; the harder, the longer; now and then one far beyond the others.</summary>
     private static byte[] Ride(LocalDate date, int device, int heartRate, int? watts, int day)
     {
         var start = date.At(new LocalTime(12, day % 50)).InUtc().ToInstant();
@@ -97,7 +96,7 @@ internal static class Season
             Start = start,
             Sport = new Sport("cycling"),
             Device = new Device(FitActivity.Development, device, 4711),
-            Samples = [.. Enumerable.Range(0, 61 + heartRate - 125).Select(second => new FitSample(
+            Samples = [.. Enumerable.Range(0, 61 + heartRate - 125 + (day % 97 == 50 ? 200 : 0)).Select(second => new FitSample(
                 start + Duration.FromSeconds(second),
                 HeartRate: heartRate + (second % 11),
                 Power: watts + (second % 20 < 5 ? 150 : 0),
