@@ -24,14 +24,15 @@ public static class ServiceHost
     internal static readonly JobKey SweepKey = new("sweep");
 
     /// <summary>Quartz in memory: schedules come from the configuration, and what was missed is caught up from our own tables (I-7).</summary>
-    public static IHost Build(Workplace workplace, string configPath)
+    /// <param name="clock">Null: that of the machine.</param>
+    public static IHost Build(Workplace workplace, string configPath, TimeProvider? clock = null)
     {
         var builder = Host.CreateApplicationBuilder(new HostApplicationBuilderSettings { ContentRootPath = AppContext.BaseDirectory });
         builder.Logging.ClearProviders();
         AddServiceManagers(builder.Services);
         builder.Services.AddSerilog(logger => ServiceLog.Configure(logger, workplace.Folder.Root, toConsole: true), writeToProviders: true);
         builder.Services.Configure<HostOptions>(options => options.ShutdownTimeout = StopsWithin);
-        builder.Services.AddSingleton(TimeProvider.System);
+        builder.Services.AddSingleton(clock ?? TimeProvider.System);
         builder.Services.AddSingleton<ServiceEnd>();
         AddHeartbeats(builder.Services, workplace.Configuration.ScanEvery.ToTimeSpan());
         builder.Services.AddSingleton(new ServiceRecord(MachineClock.Now()));

@@ -1,0 +1,52 @@
+namespace LoadWatch.Service.Tests.Endurance;
+
+/// <summary>A service that runs for years holds no more in the second than in the first.</summary>
+[Collection(Nightly.Name)]
+public sealed class EnduranceTests(NightlyService nights)
+{
+    private const double Mega = 1024 * 1024;
+
+    /// <summary>
+    /// Resident memory is looked at over these last nights: until then page caches of the connections fill, and what runs once a week is compiled to its end
+    /// after its thirtieth week.
+    /// </summary>
+    private const int ResidentNights = 200;
+
+    [Fact]
+    public void TheRegressionFindsAGrowth()
+    {
+        List<Holding> samples = [new(0, 1, 50, 20, 9), new(50, 2, 50, 22, 9), new(100, 3, 50, 24, 9)];
+
+        Assert.Equal((2, 0, 4), (
+            Holding.GrowthPer100Nights(samples, sample => sample.ManagedMegabytes),
+            Holding.GrowthPer100Nights(samples, sample => sample.WorkingSetMegabytes),
+            Holding.GrowthPer100Nights(samples, sample => sample.Handles)));
+    }
+
+    [Fact]
+    public void MemoryHandlesAndThreadsDoNotGrow()
+    {
+        var growth = new (string What, double Most, double Found)[]
+        {
+            ("managed MB", 1, Growth(sample => sample.ManagedMegabytes)),
+            ("resident MB", 1, Holding.GrowthPer100Nights([.. nights.Samples.Where(sample => sample.Night >= Season.Nights - ResidentNights)], sample => sample.WorkingSetMegabytes)),
+            ("handles", 0.5, Growth(sample => sample.Handles)),
+            ("threads", 0.5, Growth(sample => sample.Threads)),
+        };
+        TestContext.Current.TestOutputHelper?.WriteLine(string.Join(", ", growth.Select(one => FormattableString.Invariant($"{one.What} {one.Found:0.000}"))));
+        TestContext.Current.TestOutputHelper?.WriteLine(string.Join('\n', nights.Samples));
+
+        Assert.True(nights.Samples.Count > 30);
+        Assert.All(growth, one => Assert.True(one.Found < one.Most, FormattableString.Invariant($"{one.What} grow by {one.Found:0.00} per 100 nights")));
+    }
+
+    [Fact]
+    public void TheWriteAheadLogAndTheServiceLogStaySmall()
+    {
+        Assert.InRange(nights.LargestWalBytes / Mega, 0.001, 16);
+        Assert.InRange(nights.Log.Length / (double)Season.Nights, 1, 2000);
+        Assert.DoesNotContain("\"@l\":\"Error\"", nights.Log, StringComparison.Ordinal);
+    }
+
+    private double Growth(Func<Holding, double> value) => Holding.GrowthPer100Nights(nights.Samples, value);
+}
