@@ -8,10 +8,12 @@ using LoadWatch.Storage.Days;
 using LoadWatch.Storage.Decisions;
 using LoadWatch.Storage.Dialects;
 using LoadWatch.Storage.Findings;
+using LoadWatch.Storage.Inboxes;
 using LoadWatch.Storage.Notices;
 using LoadWatch.Storage.People;
 using LoadWatch.Storage.Recordings;
 using LoadWatch.Storage.Rows;
+using LoadWatch.Storage.Services;
 
 namespace LoadWatch.Storage;
 
@@ -44,6 +46,9 @@ public sealed class StoreSession
         Configurations = new ConfigurationTable(this);
         Derived = new DerivedRows(this);
         Audits = new AuditTable(this);
+        InboxRoots = new InboxRootTable(this);
+        Troubles = new TroubleTable(this);
+        Moments = new ServiceMomentTable(this);
     }
 
     public ArrivalTable Arrivals { get; }
@@ -81,6 +86,12 @@ public sealed class StoreSession
     public DerivedRows Derived { get; }
 
     public AuditTable Audits { get; }
+
+    public InboxRootTable InboxRoots { get; }
+
+    public TroubleTable Troubles { get; }
+
+    public ServiceMomentTable Moments { get; }
 
     internal Dialect Dialect { get; }
 

@@ -12,7 +12,7 @@ public static class InboxScan
 {
     private static readonly string[] Unfinished = [".tmp", ".part", ".partial", ".crdownload", ".download"];
 
-    private static readonly EnumerationOptions Options = new()
+    internal static readonly EnumerationOptions Options = new()
     {
         RecurseSubdirectories = true,
         MaxRecursionDepth = 16,

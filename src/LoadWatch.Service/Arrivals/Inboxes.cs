@@ -3,58 +3,94 @@ using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Files;
 using LoadWatch.Storage.Recordings;
+using NodaTime;
 
 namespace LoadWatch.Service.Arrivals;
 
 /// <summary>Finds the files that a sweep has to look into: all that are new or whose stamp differs from the one they were taken with, and all that are still to go.</summary>
 public static class Inboxes
 {
-    /// <summary>Changed files in the order of the inboxes and their paths.</summary>
-    public static IReadOnlyList<(FoundFile File, FileStamp Stamp)> Changed(WorkingConfiguration configuration, Store store, SweepReport report)
+    /// <summary>Changed files in the order of the inboxes and their paths. Inboxes that are not available are reported, and nothing of them is forgotten.</summary>
+    public static IReadOnlyList<(FoundFile File, FileStamp Stamp)> Changed(
+        WorkingConfiguration configuration, Store store, InboxLooks looks, Instant now, SweepReport report)
     {
-        var changed = new List<(FoundFile, FileStamp)>();
-        foreach (var inbox in configuration.Inboxes)
+        var found = looks.Run(configuration, store, report.Advanced);
+        report.Take(found);
+        Remember(store, found, now);
+        return [.. found.SelectMany(look => look.Changed)];
+    }
+
+    /// <summary>Lists one inbox. Runs on a thread of its own, since it may never return.</summary>
+    /// <param name="progress">Called for every file.</param>
+    /// <returns>Null when the folder cannot be listed.</returns>
+    public static InboxLook? Look(Inbox inbox, IReadOnlyDictionary<string, Sighting> known, Action progress)
+    {
+        if (InboxScan.List(inbox) is not { } listed)
         {
-            if (InboxScan.List(inbox) is not { } files)
+            return null;
+        }
+
+        var changed = new List<(FoundFile, FileStamp)>();
+        var unreadable = new List<string>();
+        var files = listed.Where(file => file.Path != inbox.Marker).ToList();
+        foreach (var file in files)
+        {
+            progress();
+            var stamp = SafeFile.StampOf(file.FullPath);
+            if (stamp is not null && (IsToGo(inbox) || !IsTaken(known, file, stamp)))
             {
-                report.MissingInboxes.Add(inbox.Name);
-                continue;
+                changed.Add((file, stamp));
             }
 
-            var known = store.Read(session => session.Sightings.Latest(inbox.Name));
-            report.Seen += files.Count;
-            foreach (var file in files)
+            // No stamp: gone again, or a pipe or link that intake never takes, or a name whose bytes were lost on the way into a string.
+            if (stamp is null && UnreadableNames.IsOne(file.Path))
             {
-                // No stamp: gone again, or a pipe or link that intake never takes.
-                if (SafeFile.StampOf(file.FullPath) is { } stamp && (IsToGo(inbox) || !IsTaken(known, file, stamp)))
-                {
-                    changed.Add((file, stamp));
-                }
+                unreadable.Add(file.Path);
             }
         }
 
-        return changed;
+        return new InboxLook(inbox, null, null, files.Count, changed, [.. unreadable, .. UnreadableNames.OfFolders(inbox)]);
+    }
+
+    /// <summary>Which folder each inbox is; written only where that changed.</summary>
+    private static void Remember(Store store, IReadOnlyList<InboxLook> looks, Instant now)
+    {
+        var changed = store.Read(session => looks.Where(look => look.Root is not null && session.InboxRoots.Of(look.Inbox.Name) != look.Root).ToList());
+        if (changed.Count > 0)
+        {
+            store.Write(session => changed.ForEach(look => Remember(session, look, now)));
+        }
+    }
+
+    private static void Remember(StoreSession session, InboxLook look, Instant now)
+    {
+        session.InboxRoots.Put(look.Inbox.Name, look.Root!);
+        if (look.IsReplaced)
+        {
+            session.Audits.Add("inbox_replaced", look.Inbox.Name, now);
+        }
     }
 
     /// <summary>Makes one sub-folder per person in every inbox that can be written, so that a new user sees where files go.</summary>
     /// <returns>The folders that were made.</returns>
-    public static IReadOnlyList<string> MakePersonFolders(WorkingConfiguration configuration)
+    public static IReadOnlyList<string> MakePersonFolders(WorkingConfiguration configuration) =>
+        [.. configuration.Inboxes.Where(inbox => Directory.Exists(inbox.Path)).SelectMany(inbox => MakePersonFolders(inbox, configuration))];
+
+    /// <inheritdoc cref="MakePersonFolders(WorkingConfiguration)"/>
+    public static IReadOnlyList<string> MakePersonFolders(Inbox inbox, WorkingConfiguration configuration)
     {
         var made = new List<string>();
-        foreach (var inbox in configuration.Inboxes.Where(inbox => Directory.Exists(inbox.Path)))
+        try
         {
-            try
+            foreach (var folder in Missing(inbox, configuration))
             {
-                foreach (var folder in Missing(inbox, configuration))
-                {
-                    made.Add(Directory.CreateDirectory(folder).FullName);
-                    LetInWhoMayDrop(inbox.Path, folder);
-                }
+                made.Add(Directory.CreateDirectory(folder).FullName);
+                LetInWhoMayDrop(inbox.Path, folder);
             }
-            catch (Exception e) when (e is IOException or UnauthorizedAccessException)
-            {
-                // A read-only share: its owner makes the folders.
-            }
+        }
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+        {
+            // A read-only share: its owner makes the folders.
         }
 
         return made;

@@ -40,7 +40,7 @@ public sealed class Sweep
         settlement = new Settlement(configuration, store, decoder, Report);
         intake = new Intake(configuration, store, archive, decoders, settlement, now, Report);
         recovery = new Recovery(store, archive, reader, settlement, probe);
-        moved = new MovedFiles(configuration, store, archive, reader, settlement, now);
+        moved = new MovedFiles(configuration, store, archive, reader, settlement, now, Report);
         answers = new Answers(configuration, now);
         assigned = new AssignedFiles(configuration, store, archive, reader, settlement, Report);
         tables = new Tables(configuration, store, decoder, Report);
@@ -53,6 +53,9 @@ public sealed class Sweep
     /// <summary>Whether the pages tell all that was known before this sweep; only then may it leave those alone that it has no news for.</summary>
     public bool PagesAreCurrent { get; init; }
 
+    /// <summary>Kept from sweep to sweep, since a look into an inbox may hang longer than a sweep lasts.</summary>
+    public InboxLooks Looks { get; init; } = new();
+
     public bool PagesAreWritten { get; private set; }
 
     public SweepReport Run(CancellationToken cancel = default)
@@ -60,9 +63,7 @@ public sealed class Sweep
         AdoptConfiguration(cancel);
         decoder.Basis = store.Read(session => TableBasis.Of(configuration, session));
         recovery.Run(cancel);
-        Inboxes.MakePersonFolders(configuration);
-        InboxRemoval.PutBack(configuration);
-        intake.TakeIn(Inboxes.Changed(configuration, store, Report), cancel);
+        intake.TakeIn(Inboxes.Changed(configuration, store, Looks, now, Report), cancel);
         moved.TakeUp();
         TakeUpTables(cancel);
         Report.Take(store.Write(answers.TakeUp));

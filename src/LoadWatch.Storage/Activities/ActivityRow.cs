@@ -35,6 +35,9 @@ internal sealed class ActivityRow : RecordingRow
 
     public string Stimulus { get; init; } = "";
 
+    /// <summary>Null for a row of before checksums were kept.</summary>
+    public string? Checksum { get; set; }
+
     public static ActivityRow From(StoredActivity activity) => new()
     {
         Key = activity.Key,

@@ -112,7 +112,7 @@ public sealed class Archive(DataFolder folder)
             kept.Write(piece);
         }
 
-        copy.Flush(flushToDisk: true);
+        DurableFile.Sync(copy);
         return new StagedCopy(Convert.ToHexStringLower(hash.GetHashAndReset()), kept.GetBuffer().AsMemory(0, (int)kept.Length), path);
     }
 

@@ -23,6 +23,13 @@ public sealed class SightingTable
     private const string SelectOfPath = $"SELECT {Columns} FROM sighting WHERE path = @path";
     private const string SelectOf = $"SELECT {Columns} FROM sighting WHERE sha = @sha";
 
+    private const string SelectNewest = "SELECT first_seen FROM sighting ORDER BY first_seen DESC LIMIT 1";
+
+    private const string SelectOldestWaiting = """
+        SELECT s.first_seen FROM arrival a JOIN sighting s ON s.sha = a.object_sha
+        WHERE a.state = 'waiting' ORDER BY s.first_seen LIMIT 1
+        """;
+
     private readonly StoreSession session;
 
     internal SightingTable(StoreSession session) => this.session = session;
@@ -52,6 +59,17 @@ public sealed class SightingTable
             .OrderBy(sighting => sighting.Path, StringComparer.Ordinal)
             .ThenBy(sighting => sighting.Inbox, StringComparer.Ordinal),
     ];
+
+    /// <summary>When a name was last seen with a content that was new there; null where nothing ever came.</summary>
+    public Instant? Newest() => session.Row<MomentRow>(SelectNewest)?.FirstSeen;
+
+    /// <summary>When the arrival came that has been waiting longest; null where none waits.</summary>
+    public Instant? OldestWaiting() => session.Row<MomentRow>(SelectOldestWaiting)?.FirstSeen;
+
+    private sealed class MomentRow
+    {
+        public Instant FirstSeen { get; init; }
+    }
 
     private sealed class Row
     {
