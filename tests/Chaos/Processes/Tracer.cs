@@ -5,7 +5,7 @@ namespace LoadWatch.Chaos.Processes;
 /// <summary>One system call as strace saw it; file numbers are followed by their paths.</summary>
 /// <param name="Begun">Place in the order in which calls began; a call that another thread cut in two keeps its beginning's.</param>
 /// <param name="Over">Place in the order in which they came back; never for one that did not.</param>
-public sealed record TracedCall(string Name, string Text, int Begun, int Over)
+public sealed record TracedCall(string Thread, string Name, string Text, int Begun, int Over)
 {
     public bool IsInjected => Text.Contains("(INJECTED)", StringComparison.Ordinal);
 
@@ -39,7 +39,7 @@ public sealed partial class Tracer(string log)
             if (Begins().Match(line) is { Success: true } begins)
             {
                 var isCut = line.EndsWith("<unfinished ...>", StringComparison.Ordinal);
-                calls.Add(new TracedCall(begins.Groups["name"].Value, line, at, isCut ? int.MaxValue : at));
+                calls.Add(new TracedCall(begins.Groups["thread"].Value, begins.Groups["name"].Value, line, at, isCut ? int.MaxValue : at));
                 if (isCut)
                 {
                     cut[begins.Groups["thread"].Value] = calls.Count - 1;

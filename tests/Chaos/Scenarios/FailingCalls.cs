@@ -1,126 +1,123 @@
 using LoadWatch.Chaos.Digests;
-using LoadWatch.Chaos.Inputs;
-using LoadWatch.Chaos.Mail;
 using LoadWatch.Chaos.Places;
 using LoadWatch.Chaos.Processes;
 
 namespace LoadWatch.Chaos.Scenarios;
 
 /// <summary>
-/// While one FIT file is taken in and one mail leaves, the n-th call that changes files fails, or the process is killed at it, for every n until a run passes
-/// untouched. The next sweep must end where an undisturbed one does.
+/// While one FIT file is taken in and one mail leaves, the n-th call that changes files fails, or the process is killed at it, for every n there is. The next
+/// sweep must end where an undisturbed one does, and the order of I-2 must show in every trace.
 /// </summary>
 public static class FailingCalls
 {
+    private const string Kill = "KILL";
     private const int InputOutput = 74;
     private const int CannotCreate = 73;
+    private const int Workers = 2;
 
-    /// <summary>Calls with what each can fail of.</summary>
-    private static readonly (string Call, string Fault)[] Faults =
-    [
-        .. new[] { "pwrite64", "openat", "rename", "renameat2", "mkdir" }.Select(call => (call, "ENOSPC")),
-        .. new[] { "pwrite64", "openat", "rename", "renameat2", "unlink", "fsync", "fdatasync", "ftruncate" }.Select(call => (call, "EIO")),
-    ];
-
-    private static readonly string[] Kills = ["pwrite64", "openat", "rename", "renameat2", "unlink", "fsync", "fdatasync", "ftruncate", "mkdir"];
+    /// <summary>Calls of which there are so many that the short column tries each with one kind of failure only, another one with another seed.</summary>
+    private static readonly string[] Many = ["pwrite64", "openat"];
 
     public static IReadOnlyList<Scenario> All { get; } =
     [
-        Scenario("failing-space", "D57", "ENOSPC", "The disk is full"),
-        Scenario("failing-disk", "D59", "EIO", "The disk fails"),
-        new("failing-kill", "D61", "Killed at every single call that changes files while one file comes in and one mail leaves.", trial => Run(trial, Kills.Select(call => (call, "KILL"))), Needs.Tracing),
+        new("failing-writes", "D57 D59 D61", "A full disk, a failing disk or a kill at every single write and open while one file comes in and one mail leaves.", trial => Run(trial, Many), Needs.Tracing),
+        new(
+            "failing-steps",
+            "D57 D59 D61",
+            "The same at every sync, rename, removal, new length and new folder; a failed sync of the database ends the process with 74 and nothing more is written.",
+            trial => Run(trial, ["fsync", "fdatasync", "rename", "renameat2", "unlink", "ftruncate", "mkdir"]),
+            Needs.Tracing),
     ];
 
-    private static Scenario Scenario(string id, string faults, string error, string what) => new(
-        id,
-        faults,
-        $"{what} at every single call while one file comes in and one mail leaves: rolled back or ended with 74, and right at the next sweep.",
-        trial => Run(trial, Faults.Where(fault => fault.Fault == error)),
-        Needs.Tracing);
-
-    private static void Run(Trial trial, IEnumerable<(string Call, string Fault)> faults)
+    /// <summary>What a call can fail of.</summary>
+    private static string[] Kinds(string call) => call switch
     {
-        var nights = Nights.OneFile(Clock.Machine, trial.Seed);
-        Parallel.ForEach(faults, Trial.TwoAtOnce, fault =>
+        "fsync" or "fdatasync" or "unlink" => ["EIO", Kill],
+        "ftruncate" or "mkdir" => ["ENOSPC", Kill],
+        _ => ["ENOSPC", "EIO", Kill],
+    };
+
+    private static void Run(Trial trial, IReadOnlyList<string> calls)
+    {
+        var work = new WorkList<Fault>(() => Faults(trial, calls));
+        Parallel.For(0, Workers, Trial.TwoAtOnce, _ =>
         {
-            using var server = new ScriptedServer();
-            using var prepared = trial.Prepared(nights, Clock.Machine, new PlaceOptions(Take: "move", Mail: server.Section));
-            var mails = new MailCheck(server);
-            var undisturbed = mails.Undisturbed(() => Trial.Undisturbed(prepared, nights));
-            prepared.Fill(nights.Tonight);
-            var (first, last) = OfPlace(prepared, fault.Call);
-            for (var n = first; n <= last; n++)
+            using var desk = MailDesk.Open(trial, take: "move");
+            while (work.Next() is { } fault)
             {
-                server.Forget();
-                using var place = prepared.Copy();
-                var at = $"{fault.Fault} at {fault.Call} {n}";
-                if (!Trial.Named(at, () => Disturbed(place, fault, n)))
-                {
-                    break;
-                }
-
-                if (fault.Fault != "KILL")
-                {
-                    place.SkipWaits();
-                }
-
-                Trial.Named(at, () => Trial.MustConverge(place, undisturbed));
-                trial.Figure("further copies of a mail", Trial.Named(at, () => mails.MustHold(atMost: 1)));
-                trial.Figure($"{fault.Call} {fault.Fault}", 1);
-                trial.Survived();
+                Trial.Named($"{fault.Kind} at {fault.Call} {fault.Number}", () => Disturb(trial, desk, fault));
             }
         });
     }
 
-    /// <summary>The numbers between which calls of that name touch the place; one more than the last shows that a run passes untouched.</summary>
-    private static (int First, int Last) OfPlace(Place prepared, string call)
+    /// <summary>Every call of an undisturbed sweep that touches the place, by its number on its thread, with what it is to fail of.</summary>
+    private static IEnumerable<Fault> Faults(Trial trial, IReadOnlyList<string> calls)
     {
-        using var place = prepared.Copy();
+        using var desk = MailDesk.Open(trial, take: "move");
+        using var place = desk.Night();
         var tracer = new Tracer(place.At("trace.txt"));
         Place.MustEndWell(place.StartUnder(tracer.Words(null), place.SweepWords).WaitForEnd());
-        var calls = tracer.Read();
-        DurabilityOrder.MustHold(place, calls);
-
-        // Numbers count by thread, and the thread that works on the place is one.
-        var numbers = calls.Where(traced => traced.Name == call).GroupBy(traced => traced.Text.Split(' ')[0])
-            .SelectMany(thread => thread.Select((traced, at) => (traced, Number: at + 1)))
-            .Where(numbered => numbered.traced.Names(place.Root))
-            .Select(numbered => numbered.Number)
-            .ToList();
-        return numbers.Count == 0 ? (1, 0) : (numbers.Min(), numbers.Max() + 1);
+        var traced = tracer.Read();
+        DurabilityOrder.MustHold(place, traced);
+        return
+        [
+            .. traced.Where(call => calls.Contains(call.Name, StringComparer.Ordinal))
+                .GroupBy(call => (call.Thread, call.Name))
+                .SelectMany(same => same.Select((call, at) => (call, Number: at + 1)))
+                .Where(numbered => numbered.call.Names(place.Root + "/"))
+                .SelectMany(numbered => KindsOf(trial, numbered.call.Name, numbered.Number).Select(kind => new Fault(numbered.call.Name, kind, numbered.Number)))
+                .Distinct(),
+        ];
     }
 
-    /// <returns>False when the run passed untouched.</returns>
-    private static bool Disturbed(Place place, (string Call, string Fault) fault, int n)
+    private static IEnumerable<string> KindsOf(Trial trial, string call, int number)
     {
+        var kinds = Kinds(call);
+        return trial.IsLong || !Many.Contains(call, StringComparer.Ordinal) ? kinds : [kinds[(number + trial.Seed) % kinds.Length]];
+    }
+
+    private static void Disturb(Trial trial, MailDesk desk, Fault fault)
+    {
+        using var place = desk.Night();
         var tracer = new Tracer(place.At("trace.txt"));
-        var how = fault.Fault == "KILL" ? "signal=KILL" : $"error={fault.Fault}";
-        var ended = place.StartUnder(tracer.Words($"{fault.Call}:{how}:when={n}"), place.SweepWords).WaitForEnd();
+        var ended = place.StartUnder(tracer.Words(fault.Injection), place.SweepWords).WaitForEnd();
         var calls = tracer.Read();
-        var struck = calls.Where(call => call.IsInjected).ToList();
         File.Delete(place.At("trace.txt"));
         DurabilityOrder.MustHold(place, calls);
-        if (fault.Fault == "KILL")
+        if (fault.Kind == Kill ? ended.Code == Ended.Killed : calls.Any(call => call.IsInjected))
         {
-            return ended.Code == Ended.Killed || (ended.Code == 0 ? false : throw new ChaosFailureException($"ended with {ended.Code}: {ended.Said}"));
+            MustEndAsPromised(ended, fault, calls);
+            trial.Survived();
+            trial.Figure(fault.Kind, 1);
+        }
+        else
+        {
+            // A thread that made that many calls the first time made fewer now.
+            trial.Figure("not reached", 1);
         }
 
-        if (struck.Exists(call => call.Names(place.Root)))
-        {
-            MustEndAsPromised(ended, struck[0]);
-        }
-
-        return struck.Count > 0;
+        trial.Figure("further copies of a mail", desk.MustSendTheRest(place, furtherCopies: 1, skipsWaits: fault.Kind != Kill));
     }
 
     /// <summary>Rolled back and gone on, or ended as a disk's trouble; a sync of the database that failed always ends the process (T4).</summary>
-    private static void MustEndAsPromised(Ended ended, TracedCall struck)
+    private static void MustEndAsPromised(Ended ended, Fault fault, IReadOnlyList<TracedCall> calls)
     {
-        var mustEnd = struck.Name is "fsync" or "fdatasync" && struck.Names("/data/loadwatch.db");
-        var isPromised = mustEnd ? ended.Code == InputOutput : ended.Code is 0 or InputOutput or CannotCreate;
+        var struck = calls.Where(call => call.IsInjected).Select(call => call.Text).ToList();
+        var mustEnd = calls.Any(call => call.IsInjected && call.Name is "fsync" or "fdatasync" && call.Names("/loadwatch.db"));
+        var isPromised = (fault.Kind, mustEnd) switch
+        {
+            (Kill, _) => ended.Code == Ended.Killed,
+            (_, true) => ended.Code == InputOutput,
+            _ => ended.Code is 0 or InputOutput or CannotCreate,
+        };
         if (!isPromised)
         {
-            throw new ChaosFailureException($"ended with {ended.Code} after {struck.Text}: {ended.Said}");
+            throw new ChaosFailureException($"ended with {ended.Code} after {string.Join("; ", struck)}: {ended.Said}");
         }
+    }
+
+    private sealed record Fault(string Call, string Kind, int Number)
+    {
+        public string Injection => FormattableString.Invariant($"{Call}:{(Kind == Kill ? "signal=KILL" : $"error={Kind}")}:when={Number}");
     }
 }

@@ -23,12 +23,12 @@ internal sealed class MailDesk : IDisposable
 
     /// <param name="section">Security and more keys, as <c>none</c> or <c>starttls, "user": "x"</c>; null for clear text.</param>
     /// <param name="well">How the server behaves when nothing is wrong with it.</param>
-    public static MailDesk Open(Trial trial, int contacts = 1, string? section = null, SmtpScript? well = null)
+    public static MailDesk Open(Trial trial, int contacts = 1, string? section = null, SmtpScript? well = null, string take = "leave")
     {
         var server = new ScriptedServer(well);
         var words = (section ?? "none").Split(',', 2);
         var nights = Nights.OneFile(Clock.Machine, trial.Seed);
-        var place = trial.NewPlace(Clock.Machine, new PlaceOptions(Mail: server.Secured(words[0], words.Length > 1 ? "," + words[1] : ""), Contacts: contacts));
+        var place = trial.NewPlace(Clock.Machine, new PlaceOptions(take, Mail: server.Secured(words[0], words.Length > 1 ? "," + words[1] : ""), Contacts: contacts));
         WriteSecret(place);
         place.Prepare(nights);
         return new MailDesk(server, place, nights);
@@ -44,10 +44,15 @@ internal sealed class MailDesk : IDisposable
     public void MustHaveTaken(int mails) => Trial.MustBe(mails, Server.Received.Count(mail => mail.Answer is null), "mails taken");
 
     /// <summary>The waits over, one more sweep sends what is left, and all is as if nothing had been.</summary>
+    /// <param name="skipsWaits">False where none can be: opening the store would mend what a kill left, and that is the service's to do.</param>
     /// <returns>Copies beyond the first.</returns>
-    public int MustSendTheRest(Place place, int furtherCopies)
+    public int MustSendTheRest(Place place, int furtherCopies, bool skipsWaits = true)
     {
-        place.SkipWaits();
+        if (skipsWaits)
+        {
+            place.SkipWaits();
+        }
+
         Trial.MustConverge(place, undisturbed);
         return mails.MustHold(furtherCopies);
     }
