@@ -6,7 +6,7 @@ namespace LoadWatch.Chaos.Digests;
 /// <summary>All rows of a database as sorted lines, read from a copy after the process ended; what tells of clock, path and number of attempts is left out.</summary>
 public static class StoreDump
 {
-    private static readonly string[] OutsideTables = ["schema_version", "config_version", "audit", "derived_state", "evaluation"];
+    private static readonly string[] OutsideTables = ["schema_version", "config_version", "audit", "derived_state", "evaluation", "inbox_root", "service_moment", "trouble"];
 
     /// <summary>Moments, file ids, counters.</summary>
     private static readonly string[] OutsideColumns =
