@@ -11,7 +11,13 @@ namespace LoadWatch.Service.Schedule;
 /// scheduler goes by the wall clock, and one that is set back would let it wait.
 /// </summary>
 public sealed class InboxWatcher(
-    Workplace workplace, ISchedulerFactory schedulers, SweepHeartbeat sweeps, WatchHeartbeat heartbeat, TimeProvider clock, ILogger<InboxWatcher> log) : BackgroundService
+    Workplace workplace,
+    ISchedulerFactory schedulers,
+    SupervisedSweep sweep,
+    SweepHeartbeat sweeps,
+    WatchHeartbeat heartbeat,
+    TimeProvider clock,
+    ILogger<InboxWatcher> log) : BackgroundService
 {
     private static readonly TimeSpan Pause = TimeSpan.FromSeconds(5);
 
@@ -26,7 +32,9 @@ public sealed class InboxWatcher(
             {
                 heartbeat.Beat();
                 events.Follow(Folders());
-                if (events.HaveStirred() | IsOverdue())
+
+                // What stirs during a sweep waits for its end: every trigger would be a sweep of its own.
+                if (!sweep.IsRunning && (events.HaveStirred() | IsOverdue()))
                 {
                     await scheduler.TriggerJob(ServiceHost.SweepKey, stoppingToken);
                 }

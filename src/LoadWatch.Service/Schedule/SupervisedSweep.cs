@@ -24,9 +24,14 @@ public sealed class SupervisedSweep(
     IHostApplicationLifetime lifetime,
     ILogger<SupervisedSweep> log)
 {
+    private volatile bool running;
+
+    public bool IsRunning => running;
+
     /// <returns>False where it failed of something that may pass.</returns>
     public bool Run(CancellationToken cancel)
     {
+        running = true;
         try
         {
             var now = MachineClock.Now(clock);
@@ -54,6 +59,7 @@ public sealed class SupervisedSweep(
         }
         finally
         {
+            running = false;
             heartbeat.Beat();
         }
 

@@ -14,7 +14,7 @@ public sealed class SweepJob(SupervisedSweep sweep, Workplace workplace, TimePro
     {
         if (!sweep.Run(cancellationToken) && !cancellationToken.IsCancellationRequested && workplace.Configuration.ScanEvery.ToTimeSpan() > 2 * Again)
         {
-            await context.Scheduler.ScheduleJob(TriggerBuilder.Create().ForJob(ServiceHost.SweepKey).StartAt(clock.GetUtcNow() + Again).Build());
+            await context.Scheduler.ScheduleJob(TriggerBuilder.Create().ForJob(ServiceHost.SweepKey).StartAt(clock.GetUtcNow() + Again).Build(), cancellationToken: cancellationToken);
         }
     }
 }

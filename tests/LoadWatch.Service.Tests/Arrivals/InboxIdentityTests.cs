@@ -6,6 +6,7 @@ using LoadWatch.Service.Pipeline;
 using LoadWatch.Service.Tests.Pipeline;
 using LoadWatch.Storage.Inboxes;
 using NodaTime;
+using WorkingFolder = LoadWatch.Service.Tests.Pipeline.WorkingFolder;
 
 namespace LoadWatch.Service.Tests.Arrivals;
 
