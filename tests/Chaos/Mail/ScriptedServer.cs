@@ -8,6 +8,7 @@ public sealed class ScriptedServer : IDisposable
 {
     private readonly TcpListener listener = new(IPAddress.Loopback, 0);
     private readonly List<ReceivedMail> received = [];
+    private readonly List<string> logins = [];
     private readonly List<Socket> open = [];
     private int connections;
     private volatile SmtpScript script;
@@ -44,6 +45,18 @@ public sealed class ScriptedServer : IDisposable
         }
     }
 
+    /// <summary>Passwords in the order in which they came.</summary>
+    public IReadOnlyList<string> Logins
+    {
+        get
+        {
+            lock (received)
+            {
+                return [.. logins];
+            }
+        }
+    }
+
     /// <param name="more">More keys of the section, each with a comma before it.</param>
     public string Secured(string security, string more = "") =>
         FormattableString.Invariant($"\"host\": \"localhost\", \"port\": {Port}, \"security\": \"{security}\", \"from\": \"LoadWatch <brief@example.org>\", \"timeout_seconds\": 5{more}");
@@ -54,6 +67,7 @@ public sealed class ScriptedServer : IDisposable
         lock (received)
         {
             received.Clear();
+            logins.Clear();
         }
     }
 
@@ -74,6 +88,15 @@ public sealed class ScriptedServer : IDisposable
             var answer = script.ToMessage(received.Count + 1);
             received.Add(new ReceivedMail(raw, recipients, answer));
             return answer;
+        }
+    }
+
+    /// <param name="initial">What came with AUTH PLAIN: three words parted by NUL, in Base64 (RFC 4616).</param>
+    internal void KeepLogin(string initial)
+    {
+        lock (received)
+        {
+            logins.Add(System.Text.Encoding.UTF8.GetString(Convert.FromBase64String(initial)).Split('\0')[^1]);
         }
     }
 

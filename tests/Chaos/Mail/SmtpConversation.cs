@@ -40,7 +40,7 @@ internal sealed class SmtpConversation
     {
         "EHLO" or "HELO" => Say($"250-chaos.example.org\r\n{Offers()}250 8BITMIME"),
         "STARTTLS" when script.Certificate is not null => Say("220 go ahead") && Encrypt(),
-        "AUTH" => Say(script.Login ?? "504 no login here"),
+        "AUTH" => LogIn(said),
         "MAIL" => Say(script.ToSender(number) ?? "250 sender ok"),
         "RCPT" => Recipient(said),
         "DATA" => Say("354 go on") && Say(server.Keep(ReadMessage(), [.. recipients]) ?? "250 taken"),
@@ -57,6 +57,12 @@ internal sealed class SmtpConversation
         secured.AuthenticateAsServer(script.Certificate!);
         (line, isSecured) = (secured, true);
         return true;
+    }
+
+    private bool LogIn(string said)
+    {
+        server.KeepLogin(said.Split(' ')[^1]);
+        return Say(script.Login ?? "504 no login here");
     }
 
     private bool Recipient(string said)

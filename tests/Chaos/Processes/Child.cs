@@ -76,6 +76,14 @@ public sealed class Child : IDisposable
         kill.WaitForExit();
     }
 
+    /// <summary>As <see cref="Signal"/>, to the process that runs under a tracer: its first child.</summary>
+    public void SignalTraced(string name)
+    {
+        var traced = File.ReadAllText($"/proc/{Id}/task/{Id}/children").Split(' ')[0];
+        using var kill = Process.Start("kill", ["-s", name, traced]);
+        kill.WaitForExit();
+    }
+
     /// <summary>False when it has not ended by itself in that time.</summary>
     public bool EndsWithin(TimeSpan time) => process.WaitForExit(time);
 

@@ -13,6 +13,7 @@ public static class Catalogue
         .. NamedKills.All,
         .. RandomKills.All,
         .. FailingCalls.All,
+        .. RunningService.All,
         .. MailFaults.All,
         .. Arriving.All,
         .. OddFiles.All,

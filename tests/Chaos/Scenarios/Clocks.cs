@@ -30,7 +30,7 @@ public static class Clocks
         place.SweepWell();
         time.Set(-TenYears * 5.5);
         Add(place, nights, sessions);
-        using (var service = RunningService.Start(place, [], time.Environment))
+        using (var service = ServiceAtWork.Start(place, [], time.Environment))
         {
             service.MustSay(Behind);
             time.Set(TimeSpan.Zero);

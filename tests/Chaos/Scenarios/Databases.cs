@@ -106,7 +106,7 @@ public static class Databases
         using var place = trial.Prepared(nights, Clock.Machine);
         place.SweepWell();
         using var backup = place.Copy();
-        using (var service = RunningService.Start(place, []))
+        using (var service = ServiceAtWork.Start(place, []))
         {
             service.MustSay("started");
             Array.ForEach(["", "-wal", "-shm"], side => File.Delete(place.DatabasePath + side));
@@ -171,7 +171,7 @@ public static class Databases
     {
         var nights = new Nights(Clock.Machine, trial.Seed);
         using var place = trial.Prepared(nights, Clock.Machine);
-        using (var first = RunningService.Start(place, []))
+        using (var first = ServiceAtWork.Start(place, []))
         {
             first.MustSay("started");
             var second = place.Sweep();

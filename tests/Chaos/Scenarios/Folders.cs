@@ -97,7 +97,7 @@ public static class Folders
         using var place = trial.Prepared(nights, Clock.Machine);
         Add(place, nights, sessions.Next("anna"));
         string[] tracer = ["strace", "-D", "-f", "--seccomp-bpf", "-e", $"trace={injection.Split(':')[0]}", "-e", $"inject={injection}", "-o", "/dev/null"];
-        using var service = RunningService.Start(place, tracer);
+        using var service = ServiceAtWork.Start(place, tracer);
         service.MustSay("Arrivals settled: 1 stored");
         service.MustSay("Folder events are not to be had");
         Add(place, nights, sessions.Next("anna"));

@@ -30,7 +30,7 @@ public static class LongMorning
         using var place = trial.Prepared(nights, Clock.Machine);
         using var disk = new SmallDisk(place.Data);
         void Drop() => Add(place, nights, sessions.Next("anna"));
-        using (var service = RunningService.Start(place, disk.Words))
+        using (var service = ServiceAtWork.Start(place, disk.Words))
         {
             Drop();
             service.MustSay(Settled);
@@ -56,7 +56,7 @@ public static class LongMorning
         Trial.Sound(place, nights.Truth);
     }
 
-    private static void Step(Trial trial, RunningService service, string what, params IEnumerable<Action> actions) => Trial.Named(what, () =>
+    private static void Step(Trial trial, ServiceAtWork service, string what, params IEnumerable<Action> actions) => Trial.Named(what, () =>
     {
         foreach (var action in actions)
         {

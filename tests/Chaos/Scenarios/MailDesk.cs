@@ -8,13 +8,17 @@ namespace LoadWatch.Chaos.Scenarios;
 /// <summary>A mail server, a place prepared for a night whose briefs go to it, and what comes of that night when nothing disturbs.</summary>
 internal sealed class MailDesk : IDisposable
 {
+    /// <summary>The file of the mail server's password.</summary>
+    public const string Secret = "mail.secret";
+
+    private readonly SmtpScript well;
     private readonly Place prepared;
     private readonly MailCheck mails;
     private readonly Digest undisturbed;
 
     private MailDesk(ScriptedServer server, Place prepared, Nights nights)
     {
-        (Server, this.prepared, mails) = (server, prepared, new MailCheck(server));
+        (Server, well, this.prepared, mails) = (server, server.Script, prepared, new MailCheck(server));
         undisturbed = mails.Undisturbed(() => Trial.Undisturbed(prepared, nights));
         prepared.Fill(nights.Tonight);
     }
@@ -43,11 +47,12 @@ internal sealed class MailDesk : IDisposable
 
     public void MustHaveTaken(int mails) => Trial.MustBe(mails, Server.Received.Count(mail => mail.Answer is null), "mails taken");
 
-    /// <summary>The waits over, one more sweep sends what is left, and all is as if nothing had been.</summary>
+    /// <summary>The server well again and the waits over, one more sweep sends what is left, and all is as if nothing had been.</summary>
     /// <param name="skipsWaits">False where none can be: opening the store would mend what a kill left, and that is the service's to do.</param>
     /// <returns>Copies beyond the first.</returns>
     public int MustSendTheRest(Place place, int furtherCopies, bool skipsWaits = true)
     {
+        Server.Script = well;
         if (skipsWaits)
         {
             place.SkipWaits();
@@ -65,7 +70,7 @@ internal sealed class MailDesk : IDisposable
 
     private static void WriteSecret(Place place)
     {
-        var path = place.At("mail.secret");
+        var path = place.At(Secret);
         File.WriteAllText(path, "the old one\n");
         if (!OperatingSystem.IsWindows())
         {

@@ -13,7 +13,7 @@ public static class MailFaults
 
     public static IReadOnlyList<Scenario> All { get; } =
     [
-        new("mail-away", "F84", "The server is away, then back: kept, then sent once.", trial => Recovers(trial, new SmtpScript { Banner = SmtpScript.Cut })),
+        new("mail-away", "F84", "The server is away, then back: kept, then sent once.", Away),
         new("mail-cut", "F85", "The line is cut or goes silent after the final dot, at one in ten messages: the same Message-ID again, one further copy a cut at most.", Cuts),
         new("mail-killed", "F86", "Killed between the server's 250 and the mark, at every delivery: one further copy a kill at most.", Killed),
         new("mail-later", "F87 F92", "421, 450, 451 and 452 to the sender, the recipient or the message, and a limit of ten messages: kept, then sent once.", Later),
@@ -24,15 +24,20 @@ public static class MailFaults
         new("mail-expired", "F93", "Away for longer than five days: given up, and shown by status.", Expired),
     ];
 
-    private static void Recovers(Trial trial, SmtpScript fault, string? section = null, SmtpScript? well = null, Action<Place>? mend = null)
+    private static void Away(Trial trial)
     {
-        using var desk = MailDesk.Open(trial, section: section, well: well);
+        using var desk = MailDesk.Open(trial);
+        Recovers(trial, desk, new SmtpScript { Banner = SmtpScript.Cut });
+    }
+
+    /// <summary>Under the fault nothing is taken; with the server well again everything comes, once.</summary>
+    private static void Recovers(Trial trial, MailDesk desk, SmtpScript fault, Action<Place>? mend = null)
+    {
         desk.Server.Script = fault;
         using var place = desk.Night();
         place.SweepWell();
         desk.MustHaveTaken(0);
         mend?.Invoke(place);
-        desk.Server.Script = well ?? new SmtpScript();
         desk.MustSendTheRest(place, furtherCopies: 0);
         trial.Survived();
     }
@@ -52,7 +57,6 @@ public static class MailFaults
             };
             using var place = desk.Night();
             place.SweepWell();
-            desk.Server.Script = new SmtpScript();
             trial.Figure("further copies", desk.MustSendTheRest(place, cuts));
             trial.Figure("cuts", cuts);
             trial.Figure("sends", desk.Server.Received.Count);
@@ -83,11 +87,12 @@ public static class MailFaults
 
     private static void Later(Trial trial)
     {
+        using var one = MailDesk.Open(trial);
         foreach (var answer in new[] { "421 4.3.2 closing", "450 4.2.1 greylisted", "451 4.3.0 local trouble", "452 4.3.1 full" })
         {
-            Recovers(trial, new SmtpScript { ToSender = _ => answer });
-            Recovers(trial, new SmtpScript { ToRecipient = _ => answer });
-            Recovers(trial, new SmtpScript { ToMessage = _ => answer });
+            Recovers(trial, one, new SmtpScript { ToSender = _ => answer });
+            Recovers(trial, one, new SmtpScript { ToRecipient = _ => answer });
+            Recovers(trial, one, new SmtpScript { ToMessage = _ => answer });
         }
 
         using var desk = MailDesk.Open(trial, contacts: 25);
@@ -95,16 +100,15 @@ public static class MailFaults
         using var place = desk.Night();
         place.SweepWell();
         desk.MustHaveTaken(10);
-        desk.Server.Script = new SmtpScript();
         desk.MustSendTheRest(place, furtherCopies: 0);
         trial.Survived();
     }
 
     private static void Refused(Trial trial)
     {
+        using var desk = MailDesk.Open(trial, contacts: 3);
         foreach (var answer in new[] { "550 5.1.1 no such user", "552 5.3.4 too large", "554 5.7.1 refused" })
         {
-            using var desk = MailDesk.Open(trial, contacts: 3);
             desk.Server.Script = new SmtpScript { ToRecipient = address => address == PlaceOptions.Address(1) ? answer : null };
             using var place = desk.Night();
             var said = place.SweepWell().Errors;
@@ -123,31 +127,31 @@ public static class MailFaults
         using var authority = new LoadWatch.Delivery.Tests.Mail.TestAuthority();
         using var stranger = new LoadWatch.Delivery.Tests.Mail.TestAuthority("Another authority");
         using var well = authority.Issue("localhost");
-        var trusting = $", \"certificate_authority_file\": \"{authority.PemFile}\"";
-        Recovers(trial, new SmtpScript(), "starttls" + trusting, new SmtpScript { Certificate = well });
+        using var desk = MailDesk.Open(
+            trial, section: $"starttls, \"certificate_authority_file\": \"{authority.PemFile}\"", well: new SmtpScript { Certificate = well });
+        Recovers(trial, desk, new SmtpScript());
         foreach (var bad in new[] { authority.Issue("localhost", daysLeft: -1), authority.Issue("mail.example.org"), stranger.Issue("localhost") })
         {
-            Recovers(trial, new SmtpScript { Certificate = bad }, "starttls" + trusting, new SmtpScript { Certificate = well });
+            Recovers(trial, desk, new SmtpScript { Certificate = bad });
             bad.Dispose();
         }
     }
 
     private static void Login(Trial trial)
     {
-        const string Secret = "mail.secret";
-        var section = $"none, \"user\": \"loadwatch\", \"password_file\": \"{Secret}\"";
-        Recovers(
+        using var desk = MailDesk.Open(
             trial,
-            new SmtpScript { Login = "535 5.7.8 no" },
-            section,
-            new SmtpScript { Login = "235 2.7.0 welcome" },
-            place => File.WriteAllText(place.At(Secret), "the new one\n"));
+            section: $"none, \"user\": \"loadwatch\", \"password_file\": \"{MailDesk.Secret}\"",
+            well: new SmtpScript { Login = "235 2.7.0 welcome" });
+        Recovers(trial, desk, new SmtpScript { Login = "535 5.7.8 no" }, place => File.WriteAllText(place.At(MailDesk.Secret), "the new one\n"));
+        Trial.MustBe(1, desk.Server.Logins.Count(login => login == "the new one"), "logins with the new password");
     }
 
     private static void Slow(Trial trial)
     {
-        Recovers(trial, new SmtpScript { Drip = TimeSpan.FromMilliseconds(400) });
-        Recovers(trial, new SmtpScript { Banner = null });
+        using var desk = MailDesk.Open(trial);
+        Recovers(trial, desk, new SmtpScript { Drip = TimeSpan.FromMilliseconds(400) });
+        Recovers(trial, desk, new SmtpScript { Banner = null });
     }
 
     private static void Expired(Trial trial)

@@ -1,54 +1,65 @@
+using System.Globalization;
 using LoadWatch.Chaos.Places;
 using LoadWatch.Chaos.Processes;
 
 namespace LoadWatch.Chaos.Scenarios;
 
-/// <summary>The service at work in a place, followed by what it logs to the terminal.</summary>
-internal sealed class RunningService : IDisposable
+/// <summary>A disk that fails under the running service, which nobody watches: it ends itself, or goes on by itself.</summary>
+public static class RunningService
 {
-    private static readonly TimeSpan Patience = TimeSpan.FromSeconds(150);
-    private static readonly TimeSpan Pause = TimeSpan.FromMilliseconds(50);
+    private const int InputOutput = 74;
 
-    private readonly Child child;
-    private int heard;
+    private static readonly TimeSpan Patience = TimeSpan.FromSeconds(120);
+    private static readonly TimeSpan Look = TimeSpan.FromMilliseconds(200);
 
-    private RunningService(Child child) => this.child = child;
+    public static IReadOnlyList<Scenario> All { get; } =
+    [
+        new("service-sync-fails", "D59", "A sync of the database fails once under the running service: it ends with 74, so that it is started anew.", SyncFails, Needs.Tracing),
+        new("service-space-returns", "D57", "The disk is full for some writes under the running service, then not: it goes on without a restart.", SpaceReturns, Needs.Tracing),
+    ];
 
-    public Child Process => child;
-
-    /// <param name="under">A program with its options that runs the service, or nothing.</param>
-    public static RunningService Start(Place place, IEnumerable<string> under, params IEnumerable<(string Name, string Value)> environment) =>
-        new(place.StartUnder(under, ["run"], environment));
-
-    /// <summary>Waits until it has said this behind everything waited for before.</summary>
-    /// <exception cref="ChaosFailureException">It does not come, or the service has ended.</exception>
-    public void MustSay(string words)
+    private static void SyncFails(Trial trial)
     {
-        var until = DateTime.UtcNow + Patience;
-        while (child.SaidSoFar.IndexOf(words, heard, StringComparison.Ordinal) is var at)
+        using var desk = MailDesk.Open(trial, take: "move");
+        foreach (var number in trial.IsLong ? Enumerable.Range(1, 8) : [1, 3])
         {
-            if (at >= 0)
-            {
-                heard = at + words.Length;
-                return;
-            }
-
-            if (DateTime.UtcNow > until || child.EndsWithin(Pause))
-            {
-                throw new ChaosFailureException($"\"{words}\" is not said, but: {child.SaidSoFar[heard..]}");
-            }
+            using var place = desk.Night();
+            var ended = Traced(place, $"fsync:error=EIO:when={number.ToString(CultureInfo.InvariantCulture)}").WaitForEnd();
+            Trial.MustBe(InputOutput, ended.Code, $"as the exit code after a failed sync ({ended.Said})");
+            File.Delete(place.At("trace.txt"));
+            desk.MustSendTheRest(place, furtherCopies: 1);
+            trial.Survived();
         }
     }
 
-    /// <summary>How often it has said this so far.</summary>
-    public int Count(string words) => child.SaidSoFar.Split(words).Length - 1;
-
-    /// <summary>Tells it to stop; it must end with 0.</summary>
-    public Ended Stop()
+    private static void SpaceReturns(Trial trial)
     {
-        child.Signal("TERM");
-        return Place.MustEndWell(child.WaitForEnd());
+        using var desk = MailDesk.Open(trial, take: "move");
+        foreach (var numbers in trial.IsLong ? new[] { "1..3", "5..30", "20..60", "40..200" } : ["5..30"])
+        {
+            using var place = desk.Night();
+            using var service = Traced(place, $"pwrite64:error=ENOSPC:when={numbers}");
+            WaitUntilTaken(place, service);
+            service.SignalTraced("TERM");
+            Trial.MustBe(0, service.WaitForEnd().Code, "as the exit code of a service that was told to stop");
+            File.Delete(place.At("trace.txt"));
+            desk.MustSendTheRest(place, furtherCopies: 1);
+            trial.Survived();
+        }
     }
 
-    public void Dispose() => child.Dispose();
+    /// <summary>The service under strace, which injects into calls on the write-ahead log alone.</summary>
+    private static Child Traced(Place place, string injection) => place.StartUnder(
+        [.. new Tracer(place.At("trace.txt")).Words(injection), "-P", place.DatabasePath + "-wal"], ["run"]);
+
+    private static void WaitUntilTaken(Place place, Child service)
+    {
+        for (var waited = TimeSpan.Zero; Directory.EnumerateFiles(place.Inbox, "*", SearchOption.AllDirectories).Any(); waited += Look)
+        {
+            if (waited > Patience || service.EndsWithin(Look))
+            {
+                throw new ChaosFailureException("the service does not go on by itself");
+            }
+        }
+    }
 }
