@@ -103,8 +103,8 @@ internal sealed class OddInbox(Place place, Nights nights) : IDisposable
         nights.Truth.Must(Truth.Stored, File.ReadAllBytes(late + ".tmp"));
         File.Move(late + ".tmp", late);
         Good("bo/changed.fit", Files.Fit(sessions.Next("bo")));
-        Sets("sets.csv", 90);
-        nights.Truth.Lifts("bo", place.Clock.Today.PlusDays(-1), 8 * 90);
+        Sets("sets.csv", 100);
+        nights.Truth.Lifts("bo", place.Clock.Today.PlusDays(-1), 8 * 100);
         place.Put("anna/stopped.fit", nights.Truth.Must(Truth.Refused, Half(stopped!)));
     }
 

@@ -1,5 +1,5 @@
-using System.Buffers.Binary;
 using System.Diagnostics;
+using System.IO.Compression;
 using System.Text;
 using LoadWatch.Chaos.Inputs;
 using LoadWatch.Chaos.Places;
@@ -56,7 +56,7 @@ public static class Packed
     private static IEnumerable<(string Name, string State, byte[] Bytes)> Harmful(byte[] ride)
     {
         yield return ("bomb.zip", Truth.Refused, Files.Zip(("zeros.fit", new byte[Bomb])));
-        yield return ("bomb.gz", Truth.Refused, Files.Gzip(new byte[Bomb]));
+        yield return ("bomb.gz", Truth.Refused, Squeezed(new byte[Bomb]));
         yield return ("nest.zip", Truth.Aside, Files.Zip(("inner.zip", Files.Zip(("in.fit", ride)))));
         yield return ("nest.gz", Truth.Aside, Files.Gzip(Files.Gzip(Files.Gzip(ride))));
         yield return ("entries.zip", Truth.Refused, Files.Zip(Enumerable.Range(0, TooManyEntries).Select(number => ($"{number}.fit", Array.Empty<byte>()))));
@@ -76,12 +76,24 @@ public static class Packed
         return zip;
     }
 
-    /// <summary>Two entries of the directory that name the same bytes.</summary>
+    private static byte[] Squeezed(byte[] bytes)
+    {
+        using var packed = new MemoryStream();
+        using (var gzip = new GZipStream(packed, CompressionLevel.SmallestSize))
+        {
+            gzip.Write(bytes);
+        }
+
+        return packed.ToArray();
+    }
+
+    /// <summary>Two entries of the directory that name the same bytes: the second gets sizes, check and place of the first.</summary>
     private static byte[] Overlapping(byte[] ride)
     {
-        var zip = Files.Zip(("a.fit", ride), ("b.fit", ride));
-        var second = zip.AsSpan().LastIndexOf("PK\u0001\u0002"u8);
-        BinaryPrimitives.WriteUInt32LittleEndian(zip.AsSpan(second + 42), 0);
+        var zip = Files.Zip(("a.fit", ride), ("b.fit", []));
+        var (first, second) = (zip.AsSpan().IndexOf("PK\u0001\u0002"u8), zip.AsSpan().LastIndexOf("PK\u0001\u0002"u8));
+        zip.AsSpan(first + 10, 18).CopyTo(zip.AsSpan(second + 10));
+        zip.AsSpan(first + 42, 4).CopyTo(zip.AsSpan(second + 42));
         return zip;
     }
 
