@@ -46,7 +46,7 @@ public static class Clocks
                 trial.Survived();
             }
 
-            Trial.MustBe(1, Briefs(place), "briefs after steps back");
+            Trial.MustBe(2, Briefs(place), "briefs of yesterday and today after steps back");
             Add(place, nights, sessions);
             time.Set(TimeSpan.FromDays(1));
             service.MustSay("Arrivals settled: 1 stored");
@@ -56,7 +56,7 @@ public static class Clocks
             service.Stop();
         }
 
-        Trial.MustBe(2, Briefs(place), "briefs of two dates");
+        Trial.MustBe(3, Briefs(place), "briefs of three dates");
         Trial.Sound(place, nights.Truth);
     }
 

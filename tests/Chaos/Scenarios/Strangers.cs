@@ -33,7 +33,12 @@ public static class Strangers
         File.WriteAllText(place.At("roster.csv"), Roster);
         place.Prepare(nights);
         place.Fill(nights.Tonight);
-        place.SweepWell();
+        using (var service = ServiceAtWork.Start(place, []))
+        {
+            service.MustSay("Arrivals settled: 1 stored");
+            service.Stop();
+        }
+
         MustBeOneMailEach(server, contacts: 2);
         var shown = Texts(place, "pages");
         Trial.MustSay(shown, "&lt;");
