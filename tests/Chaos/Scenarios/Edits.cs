@@ -79,7 +79,8 @@ public static class Edits
             .Replace("dan,Dan Dubois,squad", "dan,Dan Dubois,others", StringComparison.Ordinal)
             .Replace("Anna Ahola", "Anna Aalto", StringComparison.Ordinal));
         place.SweepWell();
-        Trial.MustBe(2, server.Received.Count, "mails");
+        Trial.MustBe(2, server.Received.SelectMany(mail => mail.Recipients).Distinct(StringComparer.Ordinal).Count(), "contacts who were told");
+        Trial.MustBe(server.Received.Count, server.Received.DistinctBy(mail => mail.MessageId, StringComparer.Ordinal).Count(), "different mails");
         Trial.MustBe(decided ? 1 : 0, Mails(server, 0).Count(mail => mail.Contains("Dan", StringComparison.Ordinal)), $"mails about the one who moved to the former coach, killed at {killedAt}");
         Trial.Sound(place, nights.Truth);
         trial.Survived();

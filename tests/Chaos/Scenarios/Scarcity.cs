@@ -21,7 +21,7 @@ public static class Scarcity
     private static void Memory(Trial trial) => EachLimit(trial, [4, 6, 8, 10, 12, 16], (place, megabytes) =>
         place.Sweep(("DOTNET_GCHeapHardLimit", FormattableString.Invariant($"{megabytes << 20:X}"))).Code);
 
-    private static void Handles(Trial trial) => EachLimit(trial, [24, 40, 60, 80, 110], (place, handles) =>
+    private static void Handles(Trial trial) => EachLimit(trial, [60, 100, 120, 140, 160], (place, handles) =>
         place.StartUnder(["prlimit", FormattableString.Invariant($"--nofile={handles}")], place.SweepWords).WaitForEnd().Code);
 
     private static void EachLimit(Trial trial, IEnumerable<int> limits, Func<Place, int, int> sweep)
