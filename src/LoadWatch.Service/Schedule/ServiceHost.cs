@@ -19,6 +19,9 @@ public static class ServiceHost
     /// <summary>A sweep is told to stop and comes to its next commit in this time; service managers must wait longer.</summary>
     public static readonly TimeSpan StopsWithin = TimeSpan.FromSeconds(20);
 
+    /// <summary>The host would watch for settings of its own, which there are none of, and not start where no watches are left.</summary>
+    private const string UnwatchedSettings = "--hostBuilder:reloadConfigOnChange=false";
+
     private const string WindowsName = "LoadWatch";
 
     internal static readonly JobKey SweepKey = new("sweep");
@@ -26,7 +29,7 @@ public static class ServiceHost
     /// <summary>Quartz in memory: schedules come from the configuration, and what was missed is caught up from our own tables (I-7).</summary>
     public static IHost Build(Workplace workplace, string configPath)
     {
-        var builder = Host.CreateApplicationBuilder(new HostApplicationBuilderSettings { ContentRootPath = AppContext.BaseDirectory });
+        var builder = Host.CreateApplicationBuilder(new HostApplicationBuilderSettings { ContentRootPath = AppContext.BaseDirectory, Args = [UnwatchedSettings] });
         builder.Logging.ClearProviders();
         AddServiceManagers(builder.Services);
         builder.Services.AddSerilog(logger => ServiceLog.Configure(logger, workplace.Folder.Root, toConsole: true), writeToProviders: true);

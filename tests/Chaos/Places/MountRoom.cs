@@ -7,7 +7,6 @@ namespace LoadWatch.Chaos.Places;
 public sealed class MountRoom : IDisposable
 {
     private const string KeptForSeconds = "900";
-    private const string Namespace = "/proc/{0}/ns/mnt";
     private static readonly TimeSpan Patience = TimeSpan.FromSeconds(60);
 
     private readonly Child keeper = Child.Start(["unshare", "-m", "sleep", KeptForSeconds], "/");
@@ -51,7 +50,7 @@ public sealed class MountRoom : IDisposable
     {
         try
         {
-            return new FileInfo(string.Format(CultureInfo.InvariantCulture, Namespace, process)).LinkTarget;
+            return new FileInfo($"/proc/{process}/ns/mnt").LinkTarget;
         }
         catch (IOException)
         {

@@ -74,7 +74,7 @@ public static class LongMorning
     private static void Hold(SmallDisk disk, Place place, Action meanwhile)
     {
         using var shared = new FileStream(disk.Outside(place.DatabasePath + "-shm"), FileMode.Open, FileAccess.ReadWrite, FileShare.ReadWrite);
-        if (!OperatingSystem.IsLinux() || !SpinWait.SpinUntil(() => TryLock(shared), Free))
+        if (!SpinWait.SpinUntil(() => OperatingSystem.IsLinux() && TryLock(shared), Free))
         {
             throw new ChaosFailureException("the database is never free");
         }
