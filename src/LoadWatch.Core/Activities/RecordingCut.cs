@@ -34,18 +34,17 @@ public static class RecordingCut
 
     private static IEnumerable<Instant> Moments(Recording recording) =>
     [
-        .. Extremes(recording.Samples),
+        .. new[] { recording.First, recording.Last }.OfType<Instant>(),
         .. recording.LateHeartRates.Select(beat => Instant.FromUnixTimeMilliseconds(beat.UnixMilliseconds)),
         .. recording.Sets.Select(set => set.Start).OfType<Instant>(),
     ];
-
-    private static IEnumerable<Instant> Extremes(SampleSeries samples) => new[] { samples.First, samples.Last }.OfType<Instant>();
 
     private static Recording Within(Recording recording, Instant from, Instant to)
     {
         var kept = recording with
         {
             Samples = Rows(recording.Samples, from.ToUnixTimeMilliseconds(), to.ToUnixTimeMilliseconds()),
+            Gathered = recording.Gathered.ToDictionary(one => one.Key, one => Rows(one.Value, from.ToUnixTimeMilliseconds(), to.ToUnixTimeMilliseconds())),
             LateHeartRates = [.. recording.LateHeartRates.Where(beat => IsIn(Instant.FromUnixTimeMilliseconds(beat.UnixMilliseconds)))],
             Sets = [.. recording.Sets.Where(set => set.Start is not { } start || IsIn(start))],
             Pauses = [.. recording.Pauses.Where(pause => pause.Start <= to && !(pause.End < from)).Select(pause => Clipped(pause, from, to))],
@@ -82,13 +81,13 @@ public static class RecordingCut
     /// <summary>The largest usable reading less the smallest: a running total may have begun before the window.</summary>
     private static double? DistanceMetres(Recording kept)
     {
-        var readings = UsableSamples.Of(kept, Channel.Distance).Samples;
-        return readings.Count == 0 ? null : readings.Max(reading => reading.Value) - readings.Min(reading => reading.Value);
+        var readings = UsableSamples.Of(kept, Channel.Distance);
+        return readings.Count > 0 && readings.Extremes() is var (smallest, largest) ? largest - smallest : null;
     }
 
     private static bool HoldsUsable(Recording rest) =>
         rest.Sets.Any(set => set.Active)
-        || UsableSamples.ChannelsOf(rest).Any(channel => UsableSamples.Of(rest, channel).Samples.Count > 0);
+        || UsableSamples.ChannelsOf(rest).Any(channel => UsableSamples.Of(rest, channel).Count > 0);
 
     /// <summary>From the edge of the window to the furthest moment left out, minutes rounded up.</summary>
     private static IEnumerable<string> Phrase(List<Instant> leftOut, Instant edge, string side) => leftOut.Count == 0

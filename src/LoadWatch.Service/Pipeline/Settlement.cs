@@ -20,17 +20,18 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
         var pending = store.Read(session => Pending(session, seen, force, gone));
         var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims, item.IsDecided)).ToList();
         var before = pending.ToDictionary(item => item.Content.Sha, item => item.Before, StringComparer.Ordinal);
+        var shelf = new RecordingShelf(decoder);
+        decoded.ForEach(arrival => arrival.Recordings.ToList().ForEach(shelf.Add));
+        var values = new SessionValues(decoder, shelf);
+        new Foresight(store, shelf, values).LookAhead(decoded);
         KillPoint.Pass("decoded");
         store.Write(session =>
         {
             alongside(session);
             RecordMembers(session, seen);
-            var effects = new ArrivalEffects(session, decoder);
-            foreach (var arrival in decoded)
-            {
-                effects.Apply(arrival);
-            }
-
+            var effects = new ArrivalEffects(session, shelf, values);
+            decoded.ForEach(effects.Apply);
+            seen.Select(item => item.Content.Sha).Distinct(StringComparer.Ordinal).ToList().ForEach(effects.TouchNames);
             effects.Finish();
         });
         foreach (var arrival in decoded.Where(arrival => before[arrival.Sha] != arrival.Verdict.State))
@@ -40,6 +41,16 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
 
         report.Advanced();
     }
+
+    /// <summary>Refuses an arrival that is not to be decoded; what its names held before counts as it did before it came.</summary>
+    public void Refuse(string sha, string reason) => store.Write(session =>
+    {
+        session.Arrivals.Settle(sha, ArrivalState.Refused, "unknown", reason, null);
+        var shelf = new RecordingShelf(decoder);
+        var effects = new ArrivalEffects(session, shelf, new SessionValues(decoder, shelf));
+        effects.TouchNames(sha);
+        effects.Finish();
+    });
 
     /// <summary>Contents that are new, or whose owner is told differently now, each once.</summary>
     private List<(ArrivalContent Content, IReadOnlyList<string> Claims, bool IsDecided, ArrivalState? Before)> Pending(

@@ -129,8 +129,7 @@ public sealed class Sweep
         else
         {
             // The others go on; the row says what is missing, and a later rebuild finds it again once the original is back.
-            store.Write(session => session.Arrivals.Settle(
-                objectSha, ArrivalState.Refused, "unknown", "its original in the archive is missing or damaged", null));
+            settlement.Refuse(objectSha, "its original in the archive is missing or damaged");
         }
 
         whenDone();

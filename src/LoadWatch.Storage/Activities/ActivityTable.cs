@@ -11,22 +11,31 @@ public sealed class ActivityTable
 {
     private const string Insert = """
         INSERT INTO activity (
-            key, sha, part, person, date, recordings, heart_rate_mean_bpm, heart_rate_max_bpm,
+            key, sha, part, person, date, recordings, session, heart_rate_mean_bpm, heart_rate_max_bpm,
             power_mean_watts, power_max_watts, usable_share, times_in_zone, remarks, quantities, stimulus, checksum)
         VALUES (
-            @Key, @Sha, @Part, @Person, @Date, @Recordings, @HeartRateMeanBpm, @HeartRateMaxBpm,
+            @Key, @Sha, @Part, @Person, @Date, @Recordings, @Session, @HeartRateMeanBpm, @HeartRateMaxBpm,
             @PowerMeanWatts, @PowerMaxWatts, @UsableShare, @TimesInZone, @Remarks, @Quantities, @Stimulus, @Checksum)
         """;
 
     private const string InsertHistogram = "INSERT INTO histogram (activity, channel, bins) VALUES (@Activity, @Channel, @Bins)";
 
+    private const string UpdateRecordings = "UPDATE activity SET recordings = @Recordings, checksum = @Checksum WHERE key = @Key";
+
     // Its histograms go with it.
     private const string Delete = "DELETE FROM activity WHERE key = @key";
 
     private const string SelectActivities = """
-        SELECT r.*, a.key, a.date, a.recordings, a.heart_rate_mean_bpm, a.heart_rate_max_bpm,
+        SELECT r.*, a.key, a.date, a.recordings, a.session, a.heart_rate_mean_bpm, a.heart_rate_max_bpm,
             a.power_mean_watts, a.power_max_watts, a.usable_share, a.times_in_zone, a.remarks, a.quantities, a.stimulus, a.checksum
         FROM activity a JOIN recording r ON r.sha = a.sha AND r.part = a.part
+        """;
+
+    private const string SelectMerges = """
+        SELECT r.*, a.key, a.date, a.recordings, a.session
+        FROM activity a JOIN recording r ON r.sha = a.sha AND r.part = a.part
+        WHERE r.person = @person AND r.start >= @from AND r.start <= @to
+        ORDER BY r.start, a.key
         """;
 
     private const string InDates = " WHERE a.date >= @from AND a.date <= @to";
@@ -34,6 +43,7 @@ public sealed class ActivityTable
     private const string SelectHistogram = "SELECT bins FROM histogram WHERE activity = @key AND channel = @channel";
 
     private const string SelectPage = SelectActivities + " WHERE a.key > @after ORDER BY a.key LIMIT @most";
+    private const string SelectOne = SelectActivities + " WHERE a.key = @key";
     private const string SelectHistograms = "SELECT activity, channel, bins FROM histogram WHERE activity >= @first AND activity <= @last ORDER BY activity, channel";
 
     private readonly StoreSession session;
@@ -51,6 +61,17 @@ public sealed class ActivityTable
         session.ExecuteEach(InsertHistogram, histograms);
     }
 
+    /// <summary>Notes what became of the recordings of an activity whose values stay. Nothing when there is none.</summary>
+    public void PutRecordings(StoredMerge merge)
+    {
+        if (session.Row<ActivityRow>(SelectOne, new { key = merge.Winner.Key }) is { } row)
+        {
+            row.Recordings = ActivityRow.Text(merge.Contributions);
+            row.Checksum = ActivityChecksum.Of(row, session.Rows<HistogramRow>(SelectHistograms, new { first = row.Key, last = row.Key }));
+            session.Execute(UpdateRecordings, row);
+        }
+    }
+
     /// <summary>Removes an activity; nothing when there is none.</summary>
     public void Remove(string key) => session.Execute(Delete, new { key });
 
@@ -61,6 +82,10 @@ public sealed class ActivityTable
     /// <summary>Everybody's activities whose date is in the range, both ends included, sorted by date, start and key.</summary>
     public IReadOnlyList<StoredActivity> All(LocalDate? from = null, LocalDate? to = null) =>
         Select(InDates, new { from = from ?? LocalDate.MinIsoValue, to = to ?? LocalDate.MaxIsoValue });
+
+    /// <summary>How a person's activities were made whose winning recordings start in the range, both ends included, sorted by that start and by key.</summary>
+    public IReadOnlyList<StoredMerge> Merges(string person, Instant from, Instant to) =>
+        session.Rows<ActivityRow>(SelectMerges, new { person, from, to }).ConvertAll(row => row.ToMerge());
 
     /// <summary>Time by value of one channel, or null where the activity has none.</summary>
     public Histogram? Histogram(string key, Channel channel) =>
@@ -91,6 +116,12 @@ public sealed class ActivityTable
             .OrderBy(row => row.Channel, StringComparer.Ordinal),
     ];
 
-    private List<StoredActivity> Select(string where, object values) =>
-        session.Rows<ActivityRow>(SelectActivities + where + " ORDER BY a.date, r.start, a.key", values).ConvertAll(row => row.ToActivity());
+    private IReadOnlyList<StoredActivity> Select(string where, object values) =>
+    [
+        .. session.Rows<ActivityRow>(SelectActivities + where, values)
+            .Select(row => row.ToActivity())
+            .OrderBy(activity => activity.Date)
+            .ThenBy(activity => activity.Session.Start)
+            .ThenBy(activity => activity.Key, StringComparer.Ordinal),
+    ];
 }

@@ -19,12 +19,13 @@ public static class DurabilityOrder
         foreach (var named in calls.Where(call => call.Name == "renameat2" && call.Names("/archive/incoming/")))
         {
             var part = named.Text.Split('"')[1];
-            Expect(Before(calls, named, call => call.Name == "fsync" && call.Succeeded && call.Names(part)) == 1, $"{part} is named before it is durable", named);
+            var written = calls.LastOrDefault(call => call.Begun < named.Begun && call.Name == "pwrite64" && call.Names(part));
+            Expect(Before(calls, named, call => call.Begun > (written?.Over ?? 0) && IsSync(call, part)) > 0, $"{part} is named before it is durable", named);
         }
 
         foreach (var taken in calls.Where(call => call.Name is "renameat2" or "unlink" or "rename" && call.Names($"\"{place.Inbox}/") && !call.Failed))
         {
-            var placed = calls.Where(call => call.Begun < taken.Begun && call.Name == "fsync" && call.Succeeded && call.Names(place.Data + "/archive/") && !call.Names("/incoming/")).ToList();
+            var placed = calls.Where(call => call.Over < taken.Begun && IsSync(call, place.Data + "/archive/") && !call.Names("/incoming/")).ToList();
             Expect(placed.Count > 0, "the inbox changes before the archive's folder is durable", taken);
             Expect(Before(calls, taken, call => call.Begun > placed[0].Over && IsDatabaseSync(call) && call.Succeeded) >= Commits, "the inbox changes before its effects are durable", taken);
         }
@@ -43,6 +44,10 @@ public static class DurabilityOrder
 
     private static int Before(IReadOnlyList<TracedCall> calls, TracedCall than, Func<TracedCall, bool> wanted) =>
         calls.Count(call => call.Over < than.Begun && wanted(call));
+
+    /// <summary>A sync of that file or folder, or of the whole file system.</summary>
+    private static bool IsSync(TracedCall call, string path) =>
+        call.Succeeded && (call.Name == "syncfs" || (call.Name is "fsync" or "fdatasync" && call.Names(path)));
 
     private static bool IsDatabaseSync(TracedCall call) => call.Name is "fsync" or "fdatasync" && call.Names("/loadwatch.db-wal>");
 

@@ -6,7 +6,8 @@ namespace LoadWatch.Chaos.Digests;
 /// <summary>All rows of a database as sorted lines, read from a copy after the process ended; what tells of clock, path and number of attempts is left out.</summary>
 public static class StoreDump
 {
-    private static readonly string[] OutsideTables = ["schema_version", "config_version", "audit", "derived_state", "evaluation", "inbox_root", "service_moment", "trouble"];
+    private static readonly string[] OutsideTables =
+        ["schema_version", "config_version", "audit", "derived_state", "evaluation", "inbox_root", "trouble", "service_moment"];
 
     /// <summary>Moments, file ids, counters.</summary>
     private static readonly string[] OutsideColumns =

@@ -6,6 +6,9 @@ namespace LoadWatch.Chaos.Mail;
 /// <summary>A mail server on a free port of this machine that does as its script says and keeps every message whose final dot came.</summary>
 public sealed class ScriptedServer : IDisposable
 {
+    /// <summary>A deadline for one message that only a server that never answers breaks.</summary>
+    public const int PatientSeconds = 60;
+
     private readonly TcpListener listener = new(IPAddress.Loopback, 0);
     private readonly List<ReceivedMail> received = [];
     private readonly List<string> logins = [];
@@ -23,8 +26,8 @@ public sealed class ScriptedServer : IDisposable
 
     public int Port { get; }
 
-    /// <summary>The section <c>mail</c> of a configuration that sends here in clear text.</summary>
-    public string Section => Secured("none");
+    /// <summary>The section <c>mail</c> of a configuration that sends here in clear text, with a deadline that a busy machine does not break.</summary>
+    public string Section => Secured("none", PatientSeconds);
 
     public int Connections => Volatile.Read(ref connections);
 
@@ -57,9 +60,10 @@ public sealed class ScriptedServer : IDisposable
         }
     }
 
+    /// <param name="seconds">The deadline for one message.</param>
     /// <param name="more">More keys of the section, each with a comma before it.</param>
-    public string Secured(string security, string more = "") =>
-        FormattableString.Invariant($"\"host\": \"localhost\", \"port\": {Port}, \"security\": \"{security}\", \"from\": \"LoadWatch <brief@example.org>\", \"timeout_seconds\": 5{more}");
+    public string Secured(string security, int seconds, string more = "") =>
+        FormattableString.Invariant($"\"host\": \"localhost\", \"port\": {Port}, \"security\": \"{security}\", \"from\": \"LoadWatch <brief@example.org>\", \"timeout_seconds\": {seconds}{more}");
 
     /// <summary>Forgets what came, so that the next trial counts anew.</summary>
     public void Forget()

@@ -21,7 +21,7 @@ public sealed record TracedCall(string Thread, string Name, string Text, int Beg
 public sealed partial class Tracer(string log)
 {
     /// <summary>What changes files or makes them durable. The runtime writes files by pwrite64; write is for terminals and pipes.</summary>
-    public const string Calls = "openat,pwrite64,fsync,fdatasync,ftruncate,rename,renameat,renameat2,unlink,unlinkat,mkdir";
+    public const string Calls = "openat,pwrite64,fsync,fdatasync,syncfs,ftruncate,rename,renameat,renameat2,unlink,unlinkat,mkdir";
 
     /// <param name="injection">As <c>fsync:error=EIO:when=3</c>, or null to look on.</param>
     public IEnumerable<string> Words(string? injection) =>

@@ -25,14 +25,14 @@ public static class FailingCalls
             "failing-steps",
             "D57 D59 D61",
             "The same at every sync, rename, removal, new length and new folder; a failed sync of the database ends the process with 74 and nothing more is written.",
-            trial => Run(trial, ["fsync", "fdatasync", "rename", "renameat2", "unlink", "ftruncate", "mkdir"]),
+            trial => Run(trial, ["fsync", "fdatasync", "syncfs", "rename", "renameat2", "unlink", "ftruncate", "mkdir"]),
             Needs.Tracing),
     ];
 
     /// <summary>What a call can fail of.</summary>
     private static string[] Kinds(string call) => call switch
     {
-        "fsync" or "fdatasync" or "unlink" => ["EIO", Kill],
+        "fsync" or "fdatasync" or "syncfs" or "unlink" => ["EIO", Kill],
         "ftruncate" or "mkdir" => ["ENOSPC", Kill],
         _ => ["ENOSPC", "EIO", Kill],
     };
@@ -43,10 +43,7 @@ public static class FailingCalls
         Parallel.For(0, Workers, Trial.TwoAtOnce, _ =>
         {
             using var desk = MailDesk.Open(trial, take: "move");
-            while (work.Next() is { } fault)
-            {
-                Trial.Named($"{fault.Kind} at {fault.Call} {fault.Number}", () => Disturb(trial, desk, fault));
-            }
+            work.Each(fault => Trial.Named($"{fault.Kind} at {fault.Call} {fault.Number}", () => Disturb(trial, desk, fault)));
         });
     }
 

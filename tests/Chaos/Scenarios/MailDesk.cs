@@ -27,12 +27,12 @@ internal sealed class MailDesk : IDisposable
 
     /// <param name="section">Security and more keys, as <c>none</c> or <c>starttls, "user": "x"</c>; null for clear text.</param>
     /// <param name="well">How the server behaves when nothing is wrong with it.</param>
-    public static MailDesk Open(Trial trial, int contacts = 1, string? section = null, SmtpScript? well = null, string take = "leave")
+    public static MailDesk Open(Trial trial, int contacts = 1, string? section = null, SmtpScript? well = null, string take = "leave", int seconds = ScriptedServer.PatientSeconds)
     {
         var server = new ScriptedServer(well);
         var words = (section ?? "none").Split(',', 2);
         var nights = Nights.OneFile(Clock.Machine, trial.Seed);
-        var place = trial.NewPlace(Clock.Machine, new PlaceOptions(take, Mail: server.Secured(words[0], words.Length > 1 ? "," + words[1] : ""), Contacts: contacts));
+        var place = trial.NewPlace(Clock.Machine, new PlaceOptions(take, Mail: server.Secured(words[0], seconds, words.Length > 1 ? "," + words[1] : ""), Contacts: contacts));
         WriteSecret(place);
         place.Prepare(nights);
         return new MailDesk(server, place, nights);

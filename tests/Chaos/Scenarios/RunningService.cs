@@ -9,7 +9,7 @@ public static class RunningService
 {
     private const int InputOutput = 74;
 
-    private static readonly TimeSpan Patience = TimeSpan.FromSeconds(120);
+    private static readonly TimeSpan Patience = TimeSpan.FromSeconds(300);
     private static readonly TimeSpan Look = TimeSpan.FromMilliseconds(200);
 
     public static IReadOnlyList<Scenario> All { get; } =
@@ -35,7 +35,9 @@ public static class RunningService
     private static void SpaceReturns(Trial trial)
     {
         using var desk = MailDesk.Open(trial, take: "move");
-        foreach (var numbers in trial.IsLong ? new[] { "1..3", "5..30", "20..60", "40..200" } : ["5..30"])
+
+        // Numbers count by thread, and every thread that a sweep runs on meets them once: some sweeps fail before one goes through.
+        foreach (var numbers in trial.IsLong ? new[] { "1", "5..6", "20..22", "60" } : ["5"])
         {
             using var place = desk.Night();
             using var service = Traced(place, $"pwrite64:error=ENOSPC:when={numbers}");

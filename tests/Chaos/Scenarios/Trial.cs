@@ -46,8 +46,8 @@ public sealed class Trial(Binary binary, int seed, bool isLong)
         ArgumentNullException.ThrowIfNull(nights);
         using var place = prepared.Copy();
         place.Fill(nights.Tonight);
-        place.SweepWell();
-        return Sound(place, nights.Truth);
+        var said = place.SweepWell().Errors;
+        return said.Contains("Not delivered", StringComparison.Ordinal) ? throw new ChaosFailureException($"undisturbed, and yet: {said}") : Sound(place, nights.Truth);
     }
 
     /// <summary>Sweeps once more and compares; what was disturbed must by then be as if nothing had been.</summary>

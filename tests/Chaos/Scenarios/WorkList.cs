@@ -6,8 +6,29 @@ internal sealed class WorkList<T>(Func<IEnumerable<T>> find)
 {
     private readonly Lazy<Queue<T>> left = new(() => new Queue<T>(find()));
 
+    /// <summary>Works at what is left; after a failure nobody begins anything more.</summary>
+    public void Each(Action<T> work)
+    {
+        try
+        {
+            while (Next() is { } one)
+            {
+                work(one);
+            }
+        }
+        catch
+        {
+            lock (left)
+            {
+                left.Value.Clear();
+            }
+
+            throw;
+        }
+    }
+
     /// <summary>Null when nothing is left.</summary>
-    public T? Next()
+    private T? Next()
     {
         lock (left)
         {

@@ -53,7 +53,7 @@ public sealed class ServiceTroublesTests
     {
         var troubles = ServiceTroubles.Of(status, Now);
         Assert.Equal(critical is null ? [] : [(name, critical.Value)], troubles.Select(trouble => (trouble.Name, trouble.Critical)));
-        Assert.All(troubles, trouble => Assert.True(char.IsUpper(trouble.Sentence[0]), trouble.Sentence));
+        Assert.All(troubles, trouble => Assert.False(char.IsLower(trouble.Sentence[0]), trouble.Sentence));
     }
 
     [Fact]
