@@ -39,6 +39,14 @@ public static class Program
             Console.WriteLine($"{scenario.Id,-24} {scenario.Faults,-10} {scenario.Sentence}{(scenario.Lacks is { } lacks ? $" [{lacks}]" : "")}");
         }
 
+        Console.WriteLine();
+        Console.WriteLine("| fault | what | scenarios | tests in process | left out |");
+        Console.WriteLine("| --- | --- | --- | --- | --- |");
+        foreach (var fault in Faults.All)
+        {
+            Console.WriteLine(fault.Row());
+        }
+
         return 0;
     }
 

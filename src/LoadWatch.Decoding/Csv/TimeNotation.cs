@@ -98,12 +98,14 @@ internal sealed class UnixNotation(double millisecondsPerUnit, char decimalMark)
 /// <summary>
 /// ISO 8601, extended format with seconds, a fraction after a full stop or comma, with <c>Z</c>, an offset, or neither; a blank may stand
 /// for the T.
-/// <c>Z</c> states UTC, not the offset of the place.
+/// <c>Z</c> states UTC, not the offset of the place. A leap second is read as the second before it.
 /// </summary>
 internal sealed class IsoNotation : TimeNotation
 {
     private const string Moment = "uuuu'-'MM'-'dd'T'HH':'mm':'ss;FFFFFFFFF";
     private const int DateLength = 10;
+    private const int MinutesAt = 14;
+    private const string LeapSecond = "59:60";
 
     private static readonly LocalDateTimePattern Local = LocalDateTimePattern.CreateWithInvariantCulture(Moment);
     private static readonly OffsetDateTimePattern LongOffset = OffsetDateTimePattern.CreateWithInvariantCulture(Moment + "o<Z+HH:mm>");
@@ -125,6 +127,11 @@ internal sealed class IsoNotation : TimeNotation
         if (text[DateLength] == ' ')
         {
             text = string.Concat(text.AsSpan(0, DateLength), "T", text.AsSpan(DateLength + 1));
+        }
+
+        if (text.AsSpan(Math.Min(MinutesAt, text.Length)).StartsWith(LeapSecond, StringComparison.Ordinal))
+        {
+            text = string.Concat(text.AsSpan(0, MinutesAt), "59:59", text.AsSpan(MinutesAt + LeapSecond.Length));
         }
 
         return text.AsSpan(DateLength).ContainsAny("Z+-") ? TryReadOffset(text, out time) : TryRead(Local, text, out time);

@@ -39,13 +39,25 @@ public static class CommandLine
         }
         catch (Exception e) when (Expected(e) is { } code)
         {
-            await Console.Error.WriteLineAsync(Told(e));
+            await TellAsync(Told(e));
             return code;
         }
         catch (Exception e)
         {
-            await Console.Error.WriteLineAsync($"A defect of LoadWatch, please report it:{Environment.NewLine}{e}");
+            await TellAsync($"A defect of LoadWatch, please report it:{Environment.NewLine}{e}");
             return ExitCode.Software;
+        }
+    }
+
+    private static async Task TellAsync(string text)
+    {
+        try
+        {
+            await Console.Error.WriteLineAsync(text);
+        }
+        catch (IOException)
+        {
+            // The terminal is gone, or no file handle is left to write to it: the exit code still tells.
         }
     }
 

@@ -6,6 +6,7 @@ public sealed class FolderEvents(Action<string> failed) : IDisposable
 {
     private readonly Dictionary<WatchedFolder, FileSystemWatcher?> watchers = [];
     private int stirred;
+    private int told;
 
     /// <summary>Listens to these folders from now on. One that is another folder than before under its path sends no event of it: it is listened to anew.</summary>
     public void Follow(IEnumerable<WatchedFolder> folders)
@@ -38,6 +39,16 @@ public sealed class FolderEvents(Action<string> failed) : IDisposable
 
     private void Stir() => Volatile.Write(ref stirred, 1);
 
+    /// <summary>Too many events are a stir like any other; no room for watches comes once for every folder below, and is told once.</summary>
+    private void HearOf(Exception error)
+    {
+        Stir();
+        if (error is not InternalBufferOverflowException && Interlocked.Exchange(ref told, 1) == 0)
+        {
+            failed(error.Message);
+        }
+    }
+
     private FileSystemWatcher? Watch(string path)
     {
         try
@@ -46,7 +57,7 @@ public sealed class FolderEvents(Action<string> failed) : IDisposable
             watcher.Created += (_, _) => Stir();
             watcher.Changed += (_, _) => Stir();
             watcher.Renamed += (_, _) => Stir();
-            watcher.Error += (_, _) => Stir();
+            watcher.Error += (_, error) => HearOf(error.GetException());
             watcher.EnableRaisingEvents = true;
             return watcher;
         }

@@ -19,6 +19,9 @@ public static class ServiceHost
     /// <summary>A sweep is told to stop and comes to its next commit in this time; service managers must wait longer.</summary>
     public static readonly TimeSpan StopsWithin = TimeSpan.FromSeconds(20);
 
+    /// <summary>The host would watch for settings of its own, which there are none of, and not start where no watches are left.</summary>
+    private const string UnwatchedSettings = "--hostBuilder:reloadConfigOnChange=false";
+
     private const string WindowsName = "LoadWatch";
 
     internal static readonly JobKey SweepKey = new("sweep");
@@ -27,7 +30,7 @@ public static class ServiceHost
     /// <param name="clock">Null: that of the machine.</param>
     public static IHost Build(Workplace workplace, string configPath, TimeProvider? clock = null)
     {
-        var builder = Host.CreateApplicationBuilder(new HostApplicationBuilderSettings { ContentRootPath = AppContext.BaseDirectory });
+        var builder = Host.CreateApplicationBuilder(new HostApplicationBuilderSettings { ContentRootPath = AppContext.BaseDirectory, Args = [UnwatchedSettings] });
         builder.Logging.ClearProviders();
         AddServiceManagers(builder.Services);
         builder.Services.AddSerilog(logger => ServiceLog.Configure(logger, workplace.Folder.Root, toConsole: true), writeToProviders: true);

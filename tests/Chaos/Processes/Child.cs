@@ -26,6 +26,18 @@ public sealed class Child : IDisposable
 
     public int Id => process.Id;
 
+    /// <summary>What it has written until now.</summary>
+    public string SaidSoFar
+    {
+        get
+        {
+            lock (output)
+            {
+                return output.ToString();
+            }
+        }
+    }
+
     public static Child Start(IEnumerable<string> words, string folder, params IEnumerable<(string Name, string Value)> environment)
     {
         var line = words.ToList();

@@ -16,6 +16,16 @@ public static class Catalogue
         .. RunningService.All,
         .. MailFaults.All,
         .. Arriving.All,
+        .. OddFiles.All,
+        .. Folders.All,
+        .. Packed.All,
+        .. Strangers.All,
+        .. Clocks.All,
+        .. FullDisks.All,
+        .. Databases.All,
+        .. Scarcity.All,
+        .. LongMorning.All,
+        .. Edits.All,
     ];
 
     /// <exception cref="ArgumentException">There is none of that name.</exception>

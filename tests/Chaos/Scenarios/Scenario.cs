@@ -11,6 +11,9 @@ public enum Needs
 
     /// <summary>unshare with a mount namespace: root.</summary>
     Mounting = 2,
+
+    /// <summary>The library that lets a program see another time.</summary>
+    Faking = 4,
 }
 
 /// <summary>One way to disturb the service.</summary>
@@ -24,6 +27,7 @@ public sealed record Scenario(string Id, string Faults, string Sentence, Action<
     public string? Lacks =>
         Needs.HasFlag(Needs.Tracing) && !Processes.Tool.CanTrace ? "strace that may trace is not here"
         : Needs.HasFlag(Needs.Mounting) && !Processes.Tool.CanMount ? "a mount namespace of one's own is not to be had here"
+        : Needs.HasFlag(Needs.Faking) && Processes.FakeTime.Library is null ? "libfaketime is not here"
         : !OperatingSystem.IsLinux() ? "this is not Linux"
         : null;
 }

@@ -98,6 +98,16 @@ public sealed class Trial(Binary binary, int seed, bool isLong)
         }
     }
 
+    /// <exception cref="ChaosFailureException">Somebody who looks for the words does not find them.</exception>
+    public static void MustSay(string said, string wanted)
+    {
+        ArgumentNullException.ThrowIfNull(said);
+        if (!said.Contains(wanted, StringComparison.Ordinal))
+        {
+            throw new ChaosFailureException($"\"{wanted}\" is not said, but: {said}");
+        }
+    }
+
     /// <summary>Counts one disturbance that was survived.</summary>
     public void Survived() => Interlocked.Increment(ref provoked);
 
