@@ -47,7 +47,7 @@ public sealed class Store : IDisposable
             try
             {
                 using var transaction = dialect.BeginWrite(writer);
-                var result = work(new StoreSession(dialect, transaction));
+                var result = work(new StoreSession(dialect, writer, transaction));
                 transaction.Commit();
                 return result;
             }
@@ -66,7 +66,7 @@ public sealed class Store : IDisposable
         try
         {
             using var transaction = dialect.BeginRead(reader);
-            return work(new StoreSession(dialect, transaction));
+            return work(new StoreSession(dialect, reader, transaction));
         }
         finally
         {

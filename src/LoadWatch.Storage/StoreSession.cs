@@ -18,13 +18,15 @@ namespace LoadWatch.Storage;
 /// <summary>The tables within one transaction. Not to be kept beyond it.</summary>
 public sealed class StoreSession
 {
+    private readonly DbConnection connection;
     private readonly DbTransaction transaction;
 
     static StoreSession() => ColumnTypes.Register();
 
-    internal StoreSession(Dialect dialect, DbTransaction transaction)
+    internal StoreSession(Dialect dialect, DbConnection connection, DbTransaction transaction)
     {
         Dialect = dialect;
+        this.connection = connection;
         this.transaction = transaction;
         Arrivals = new ArrivalTable(this);
         Sightings = new SightingTable(this);
@@ -40,9 +42,11 @@ public sealed class StoreSession
         TableVersions = new TableVersionTable(this);
         Questions = new QuestionTable(this);
         Recomputations = new RecomputationTable(this);
+        Outdated = new OutdatedTable(this);
         People = new PersonStateTable(this);
         Configurations = new ConfigurationTable(this);
         Derived = new DerivedRows(this);
+        Basis = new BasisTable(this);
         Audits = new AuditTable(this);
     }
 
@@ -74,11 +78,15 @@ public sealed class StoreSession
 
     public RecomputationTable Recomputations { get; }
 
+    public OutdatedTable Outdated { get; }
+
     public PersonStateTable People { get; }
 
     public ConfigurationTable Configurations { get; }
 
     public DerivedRows Derived { get; }
+
+    public BasisTable Basis { get; }
 
     public AuditTable Audits { get; }
 
@@ -86,6 +94,16 @@ public sealed class StoreSession
 
     /// <summary>All rows, read to the end: an error in any of them is thrown here.</summary>
     internal List<T> Rows<T>(string sql, object? values = null) => Connection.Query<T>(sql, values, transaction).AsList();
+
+    /// <summary>Goes through the rows one by one, column by column: for results of which nobody wants objects.</summary>
+    internal void EachRow(string sql, object? values, Action<DbDataReader> row)
+    {
+        using var reader = (DbDataReader)Connection.ExecuteReader(sql, values, transaction);
+        while (reader.Read())
+        {
+            row(reader);
+        }
+    }
 
     /// <summary>The only row, or null.</summary>
     internal T? Row<T>(string sql, object? values = null)
@@ -102,5 +120,5 @@ public sealed class StoreSession
         where T : class =>
         Connection.Execute(sql, rows, transaction);
 
-    private DbConnection Connection => transaction.Connection ?? throw new InvalidOperationException("the transaction of this session is over");
+    private DbConnection Connection => transaction.Connection is null ? throw new InvalidOperationException("the transaction of this session is over") : connection;
 }

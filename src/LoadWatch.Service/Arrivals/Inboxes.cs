@@ -2,38 +2,46 @@ using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Files;
-using LoadWatch.Storage.Recordings;
 
 namespace LoadWatch.Service.Arrivals;
 
 /// <summary>Finds the files that a sweep has to look into: all that are new or whose stamp differs from the one they were taken with, and all that are still to go.</summary>
 public static class Inboxes
 {
-    /// <summary>Changed files in the order of the inboxes and their paths.</summary>
-    public static IReadOnlyList<(FoundFile File, FileStamp Stamp)> Changed(WorkingConfiguration configuration, Store store, SweepReport report)
+    /// <summary>Changed files in the order of the inboxes and, within each, of their paths.</summary>
+    public static IReadOnlyList<(FoundFile File, FileStamp Stamp)> Changed(WorkingConfiguration configuration, Store store, KnownFiles known, SweepReport report)
     {
-        var changed = new List<(FoundFile, FileStamp)>();
+        var changed = new List<(FoundFile File, FileStamp Stamp)>();
         foreach (var inbox in configuration.Inboxes)
         {
-            if (InboxScan.List(inbox) is not { } files)
+            var ofInbox = new List<(FoundFile File, FileStamp Stamp)>();
+            if (!Look(inbox, known.Of(inbox.Name, store), ofInbox, report))
             {
                 report.MissingInboxes.Add(inbox.Name);
                 continue;
             }
 
-            var known = store.Read(session => session.Sightings.Latest(inbox.Name));
-            report.Seen += files.Count;
-            foreach (var file in files)
-            {
-                // No stamp: gone again, or a pipe or link that intake never takes.
-                if (SafeFile.StampOf(file.FullPath) is { } stamp && (IsToGo(inbox) || !IsTaken(known, file, stamp)))
-                {
-                    changed.Add((file, stamp));
-                }
-            }
+            changed.AddRange(ofInbox.OrderBy(found => found.File.Path, StringComparer.Ordinal));
         }
 
         return changed;
+    }
+
+    private static bool Look(Inbox inbox, KnownInbox known, List<(FoundFile File, FileStamp Stamp)> changed, SweepReport report)
+    {
+        var seen = 0;
+        var isThere = InboxScan.TryEach(inbox, (path, fullPath) =>
+        {
+            seen++;
+
+            // No stamp: gone again, or a pipe or link that intake never takes.
+            if (SafeFile.StampOf(fullPath) is { } stamp && (IsToGo(inbox) || !known.Has(path, stamp)))
+            {
+                changed.Add((new FoundFile(inbox, path.ToString(), fullPath.ToString()), stamp));
+            }
+        });
+        report.Seen += isThere ? seen : 0;
+        return isThere;
     }
 
     /// <summary>Makes one sub-folder per person in every inbox that can be written, so that a new user sees where files go.</summary>
@@ -81,7 +89,4 @@ public static class Inboxes
 
     /// <summary>What still stands in such an inbox is taken again, known or not: the process may have ended between its effects and its removal.</summary>
     private static bool IsToGo(Inbox inbox) => inbox.Take == TakeMode.Move;
-
-    private static bool IsTaken(IReadOnlyDictionary<string, Sighting> known, FoundFile file, FileStamp stamp) =>
-        known.TryGetValue(file.Path, out var last) && last.Stamp == stamp;
 }

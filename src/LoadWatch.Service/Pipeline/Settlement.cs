@@ -7,9 +7,15 @@ using LoadWatch.Storage.Recordings;
 
 namespace LoadWatch.Service.Pipeline;
 
-/// <summary>Decides what becomes of contents and commits all effects of a group at once: states, recordings, activities, dirty dates (I-3, I-4).</summary>
+/// <summary>
+/// Decides what becomes of contents and commits all effects of a group at once: states, recordings, activities, dirty dates (I-3, I-4). One group may be decoded
+/// while the one before it commits; groups commit in the order in which they began.
+/// </summary>
 public sealed class Settlement(WorkingConfiguration configuration, Store store, ArrivalDecoder decoder, SweepReport report)
 {
+    private Task committing = Task.CompletedTask;
+    private HashSet<string> inCommit = new(StringComparer.Ordinal);
+
     /// <param name="force">Decode and judge again even where nothing about the arrival changed.</param>
     public void Settle(IReadOnlyList<SeenContent> seen, bool force) => Settle(seen, force, [], _ => { });
 
@@ -17,10 +23,51 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
     /// <param name="alongside">Written in the same commit as the effects.</param>
     public void Settle(IReadOnlyList<SeenContent> seen, bool force, IReadOnlyList<Sighting> gone, Action<StoreSession> alongside)
     {
+        Begin(seen, force, gone, alongside);
+        Finish();
+    }
+
+    /// <summary>Decodes the contents and starts their commit; what they hold may be used until it is over.</summary>
+    /// <inheritdoc cref="Settle(IReadOnlyList{SeenContent}, bool, IReadOnlyList{Sighting}, Action{StoreSession})"/>
+    public void Begin(IReadOnlyList<SeenContent> seen, bool force, IReadOnlyList<Sighting> gone, Action<StoreSession> alongside)
+    {
+        if (seen.Any(item => inCommit.Contains(item.Content.Sha)))
+        {
+            // Who claims a content is known once its other names are committed.
+            Finish();
+        }
+
         var pending = store.Read(session => Pending(session, seen, force, gone));
         var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims, item.IsDecided)).ToList();
         var before = pending.ToDictionary(item => item.Content.Sha, item => item.Before, StringComparer.Ordinal);
         KillPoint.Pass("decoded");
+        Finish();
+        inCommit = seen.Select(item => item.Content.Sha).ToHashSet(StringComparer.Ordinal);
+        committing = Task.Run(() => Commit(seen, decoded, before, alongside));
+    }
+
+    /// <summary>Does something once everything that began is durable.</summary>
+    public void Then(Action afterwards)
+    {
+        var last = committing;
+        committing = Task.Run(() =>
+        {
+            last.GetAwaiter().GetResult();
+            afterwards();
+        });
+    }
+
+    /// <summary>Waits until everything that began is committed, and throws what went wrong with it.</summary>
+    public void Finish()
+    {
+        var last = committing;
+        (committing, inCommit) = (Task.CompletedTask, new HashSet<string>(StringComparer.Ordinal));
+        last.GetAwaiter().GetResult();
+    }
+
+    private void Commit(
+        IReadOnlyList<SeenContent> seen, IReadOnlyList<DecodedArrival> decoded, Dictionary<string, ArrivalState?> before, Action<StoreSession> alongside)
+    {
         store.Write(session =>
         {
             alongside(session);

@@ -51,9 +51,9 @@ public sealed class SqliteDialect : Dialect
 
     public override DbConnection OpenReader() => Open("PRAGMA query_only=ON");
 
-    public override DbTransaction BeginWrite(DbConnection connection) => ((SqliteConnection)connection).BeginTransaction(deferred: false);
+    public override DbTransaction BeginWrite(DbConnection connection) => Provided(connection).BeginTransaction(deferred: false);
 
-    public override DbTransaction BeginRead(DbConnection connection) => ((SqliteConnection)connection).BeginTransaction(deferred: true);
+    public override DbTransaction BeginRead(DbConnection connection) => Provided(connection).BeginTransaction(deferred: true);
 
     public override bool LostDurability(DbException error) =>
         error is SqliteException { SqliteExtendedErrorCode: IoErrorOnSync or IoErrorOnFolderSync };
@@ -71,9 +71,11 @@ public sealed class SqliteDialect : Dialect
         }
     }
 
-    private SqliteConnection Open(string access)
+    private static SqliteConnection Provided(DbConnection connection) => (SqliteConnection)((PreparedConnection)connection).Inner;
+
+    private PreparedConnection Open(string access)
     {
-        var connection = new SqliteConnection(connectionString);
+        var connection = new PreparedConnection(new SqliteConnection(connectionString));
         try
         {
             connection.Open();

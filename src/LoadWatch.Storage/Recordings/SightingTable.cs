@@ -20,6 +20,8 @@ public sealed class SightingTable
 
     private const string Delete = "DELETE FROM sighting WHERE inbox = @Inbox AND path = @Path AND sha = @Sha";
     private const string SelectLatest = $"SELECT {Columns} FROM sighting WHERE inbox = @inbox AND latest = 1";
+    private const string CountLatestOf = "SELECT COUNT(*) FROM sighting WHERE inbox = @inbox AND latest = 1";
+    private const string SelectStamps = "SELECT path, size, mtime, file_id FROM sighting WHERE inbox = @inbox AND latest = 1";
     private const string SelectOfPath = $"SELECT {Columns} FROM sighting WHERE path = @path";
     private const string SelectOf = $"SELECT {Columns} FROM sighting WHERE sha = @sha";
 
@@ -30,6 +32,13 @@ public sealed class SightingTable
     /// <summary>The newest content of every name in an inbox, by path.</summary>
     public IReadOnlyDictionary<string, Sighting> Latest(string inbox) =>
         session.Rows<Row>(SelectLatest, new { inbox }).ToDictionary(row => row.Path, row => row.ToSighting(), StringComparer.Ordinal);
+
+    /// <summary>Number of names in an inbox.</summary>
+    public int CountLatest(string inbox) => session.Value<int>(CountLatestOf, new { inbox });
+
+    /// <summary>Goes through the names of an inbox with the stamps of their newest contents, in no order: there may be a million.</summary>
+    public void EachLatest(string inbox, Action<string, FileStamp> each) => session.EachRow(
+        SelectStamps, new { inbox }, row => each(row.GetString(0), new FileStamp(row.GetInt64(1), row.GetInt64(2), row.GetString(3))));
 
     /// <summary>Notes that a name holds a content now. The first moment of the pair stays; the stamp is the new one. A content that comes back counts anew from now on.</summary>
     public void Upsert(string inbox, string path, string sha, Instant firstSeen, FileStamp stamp)
