@@ -32,7 +32,7 @@ public static class ActivityComputation
             TimesInZone = loads.TimesInZone,
             Quantities = loads.Quantities,
             Stimulus = stimulus.Regions,
-            Remarks = [.. usable.TooLittle.Select(TooLittle), .. loads.Remarks, .. stimulus.Remarks],
+            Remarks = [.. usable.TooLittle.Select(TooLittle), .. loads.Remarks, .. stimulus.Remarks, .. loads.HistogramRemarks],
         };
     }
 

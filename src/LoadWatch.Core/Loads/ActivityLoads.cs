@@ -1,6 +1,5 @@
 using LoadWatch.Activities;
 using LoadWatch.People;
-using LoadWatch.Recordings;
 using NodaTime;
 
 namespace LoadWatch.Loads;
@@ -8,43 +7,25 @@ namespace LoadWatch.Loads;
 /// <summary>Every quantity and zone time of one recording, and why one is missing.</summary>
 /// <param name="Quantities">Sorted by name.</param>
 /// <param name="TimesInZone">Heart rate, power, speed, in this order.</param>
-/// <param name="Remarks">In plain words.</param>
+/// <param name="Remarks">Of the sets, in plain words.</param>
+/// <param name="HistogramRemarks">What <see cref="HistogramLoads"/> says.</param>
 public sealed record ActivityLoads(
     IReadOnlyList<Quantity> Quantities,
     IReadOnlyList<TimeInZone> TimesInZone,
-    IReadOnlyList<string> Remarks)
+    IReadOnlyList<string> Remarks,
+    IReadOnlyList<string> HistogramRemarks)
 {
     public static ActivityLoads Of(UsableRecording usable, LocalDate date, Person person, AnchorBook anchors, ComputationSettings settings)
     {
-        var (ofHeartRate, remarks) = HeartRateLoads.Of(usable, date, person, anchors);
+        var ofSpeed = SpeedLoads.OfSamples(usable);
+        var top = SessionLoads.Find(ofSpeed, QuantityNames.SpeedTop)?.Value;
+        var ofHistograms = HistogramLoads.Of(usable.Histograms, usable.Recording.Sport, top, date, person, anchors, settings);
         var (ofSets, remark) = SetTotals.Of(usable.Recording.Sets);
-        var ofSpeed = SpeedLoads.Of(usable, anchors.On(date, person.Id, AnchorKind.SpeedMax), settings);
-        IEnumerable<Quantity> quantities = [.. ofHeartRate, .. ExternalLoads.Of(usable), .. ofSpeed, .. ofSets];
+        IEnumerable<Quantity> quantities = [.. ofHistograms.Quantities, .. ExternalLoads.Of(usable), .. ofSpeed, .. ofSets];
         return new ActivityLoads(
             [.. quantities.OrderBy(quantity => quantity.Name, StringComparer.Ordinal)],
-            [.. Zones(usable, date, person, anchors, settings)],
-            remark is null ? remarks : [.. remarks, remark]);
-    }
-
-    private static IEnumerable<TimeInZone> Zones(
-        UsableRecording usable, LocalDate date, Person person, AnchorBook anchors, ComputationSettings settings)
-    {
-        if (usable.Histograms.TryGetValue(Channel.HeartRate, out var heartRate)
-            && ZoneTimes.OfHeartRate(heartRate, date, person, anchors, settings.HeartRateReserveBounds) is { } ofHeartRate)
-        {
-            yield return ofHeartRate;
-        }
-
-        if (!usable.Recording.Sport.IsOnFoot
-            && usable.Histograms.TryGetValue(Channel.Power, out var power)
-            && anchors.On(date, person.Id, AnchorKind.CriticalPower) is { } criticalPower)
-        {
-            yield return ZoneTimes.OfPower(power, criticalPower, settings.PowerBounds);
-        }
-
-        if (usable.Histograms.TryGetValue(Channel.Speed, out var speed))
-        {
-            yield return ZoneTimes.OfSpeed(speed, settings.SpeedBounds);
-        }
+            ofHistograms.TimesInZone,
+            remark is null ? [] : [remark],
+            ofHistograms.Remarks);
     }
 }

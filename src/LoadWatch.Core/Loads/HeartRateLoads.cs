@@ -1,18 +1,25 @@
 using LoadWatch.Activities;
 using LoadWatch.People;
-using LoadWatch.Recordings;
 using NodaTime;
 
 namespace LoadWatch.Loads;
 
-/// <summary>Every load that follows from heart rate and a person's anchors.</summary>
+/// <summary>
+/// Every load that follows from heart rate and a person's anchors. All of them are sums over the bins of the histogram in ascending order, so what is
+/// computed from samples and what is computed again from a stored histogram agree to the last bit.
+/// </summary>
 public static class HeartRateLoads
 {
+    /// <summary>Everything that <see cref="Of"/> may say, so that what it said before can be told from other remarks.</summary>
+    public static IReadOnlyList<string> EveryRemark { get; } = [.. HeartRateReserve.EveryMissing, .. TrimpPair.EveryMissing];
+
     /// <summary>Only what can be computed, each at most once, and in plain words what hinders the others.</summary>
+    /// <param name="heartRate">Milliseconds by whole bpm; null where heart rate was not recorded or is not usable: then nothing is told.</param>
+    /// <param name="date">The local date of the session: anchors are taken as they hold on it.</param>
     public static (IReadOnlyList<Quantity> Quantities, IReadOnlyList<string> Remarks) Of(
-        UsableRecording usable, LocalDate date, Person person, AnchorBook anchors)
+        Histogram? heartRate, LocalDate date, Person person, AnchorBook anchors)
     {
-        if (!usable.Histograms.TryGetValue(Channel.HeartRate, out var heartRate))
+        if (heartRate is null)
         {
             return ([], []);
         }

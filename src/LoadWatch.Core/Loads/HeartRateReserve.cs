@@ -14,6 +14,14 @@ namespace LoadWatch.Loads;
 /// <param name="Estimated">True when one of the two comes from an equation.</param>
 public sealed record HeartRateReserve(double RestBpm, double MaxBpm, bool Estimated)
 {
+    private const string NoBound = "no heart_rate_rest, and neither heart_rate_max nor a birth year: no load by heart-rate reserve";
+    private const string NoRest = "no heart_rate_rest: no load by heart-rate reserve";
+    private const string NoMax = "neither heart_rate_max nor a birth year: no load by heart rate";
+    private const string NoSpan = "heart_rate_max is not above heart_rate_rest: no load by heart-rate reserve";
+
+    /// <summary>Every reason that <see cref="On"/> may give.</summary>
+    public static IReadOnlyList<string> EveryMissing { get; } = [NoBound, NoRest, NoMax, NoSpan];
+
     /// <summary>The reserve on a date, or null with the reason in plain words.</summary>
     public static (HeartRateReserve? Reserve, string? Missing) On(LocalDate date, Person person, AnchorBook anchors)
     {
@@ -21,10 +29,10 @@ public sealed record HeartRateReserve(double RestBpm, double MaxBpm, bool Estima
         var max = HeartRateMaximum.On(date, person, anchors);
         return (rest, max) switch
         {
-            (null, null) => (null, "no heart_rate_rest, and neither heart_rate_max nor a birth year: no load by heart-rate reserve"),
-            (null, _) => (null, "no heart_rate_rest: no load by heart-rate reserve"),
-            (_, null) => (null, "neither heart_rate_max nor a birth year: no load by heart rate"),
-            _ when max.Bpm <= rest.Value => (null, "heart_rate_max is not above heart_rate_rest: no load by heart-rate reserve"),
+            (null, null) => (null, NoBound),
+            (null, _) => (null, NoRest),
+            (_, null) => (null, NoMax),
+            _ when max.Bpm <= rest.Value => (null, NoSpan),
             _ => (new HeartRateReserve(rest.Value, max.Bpm, max.Estimated || rest.Source == AnchorSource.Estimated), null),
         };
     }

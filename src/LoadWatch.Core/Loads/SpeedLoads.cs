@@ -7,26 +7,20 @@ namespace LoadWatch.Loads;
 /// <summary>What follows from speed where a body runs: sports on foot and team sports. On wheels or water the same speed costs something else.</summary>
 public static class SpeedLoads
 {
-    /// <summary>Only what is known; each at most once.</summary>
-    /// <param name="best">The anchor <c>speed_max</c> on the date, or null: then nothing is told as a share of it.</param>
-    public static IEnumerable<Quantity> Of(UsableRecording usable, Anchor? best, ComputationSettings settings)
-    {
-        var sport = usable.Recording.Sport;
-        if (usable[Channel.Speed] is not { } speed || !(sport.IsOnFoot || sport.IsTeamSport))
-        {
-            return [];
-        }
+    /// <summary>What needs the readings one after the other; only what is known, each at most once.</summary>
+    public static IReadOnlyList<Quantity> OfSamples(UsableRecording usable) =>
+        Runs(usable.Recording.Sport) && usable[Channel.Speed] is { } speed ? [.. OfTop(SpeedTop.MetresPerSecond(speed)), .. OfChanges(speed)] : [];
 
-        var histogram = usable.Histograms[Channel.Speed];
-        var top = SpeedTop.MetresPerSecond(speed);
-        return
-        [
-            .. OfTop(top),
-            .. OfBounds(histogram, settings.SpeedBounds),
-            .. best is { Value: > 0 } ? SpeedMaxShares.Of(histogram, top, best, settings.SpeedMaxShares) : [],
-            .. OfChanges(speed),
-        ];
-    }
+    /// <summary>What follows from the time by speed; only what is known, each at most once.</summary>
+    /// <param name="speed">Milliseconds by tenths of a metre per second; null where speed is not usable.</param>
+    /// <param name="top">Top speed, m/s, or null.</param>
+    /// <param name="best">The anchor <c>speed_max</c> on the date, or null: then nothing is told as a share of it.</param>
+    public static IReadOnlyList<Quantity> OfHistogram(Histogram? speed, Sport sport, double? top, Anchor? best, ComputationSettings settings) =>
+        speed is null || !Runs(sport)
+            ? []
+            : [.. OfBounds(speed, settings.SpeedBounds), .. best is { Value: > 0 } ? SpeedMaxShares.Of(speed, top, best, settings.SpeedMaxShares) : []];
+
+    private static bool Runs(Sport sport) => sport.IsOnFoot || sport.IsTeamSport;
 
     private static IEnumerable<Quantity> OfTop(double? top)
     {

@@ -68,6 +68,13 @@ public class SpeedLoadsTests
         Assert.Empty(Of("cycling", samples));
     }
 
-    private static IEnumerable<Quantity> Of(string sport, SampleSeries samples, Anchor? best = null) =>
-        SpeedLoads.Of(new UsableRecording(Given.Recording(sport, samples), shareWanted: 0.5), best, new ComputationSettings());
+    private static IEnumerable<Quantity> Of(string sport, SampleSeries samples, Anchor? best = null)
+    {
+        var usable = new UsableRecording(Given.Recording(sport, samples), shareWanted: 0.5);
+        var ofSamples = SpeedLoads.OfSamples(usable);
+        var top = ofSamples.FirstOrDefault(quantity => quantity.Name == QuantityNames.SpeedTop)?.Value;
+        var ofHistogram = SpeedLoads.OfHistogram(
+            usable.Histograms.GetValueOrDefault(Channel.Speed), usable.Recording.Sport, top, best, new ComputationSettings());
+        return [.. ofSamples.Take(1), .. ofHistogram, .. ofSamples.Skip(1)];
+    }
 }
