@@ -93,7 +93,7 @@ public static class InboxScan
             path[entry.Directory.Length] = Path.DirectorySeparatorChar;
             entry.FileName.CopyTo(path.AsSpan(entry.Directory.Length + 1));
             var full = path.AsSpan(0, length);
-            var below = full[(entry.RootDirectory.Length + (Path.EndsInDirectorySeparator(entry.RootDirectory) ? 0 : 1))..];
+            ReadOnlySpan<char> below = full[(entry.RootDirectory.Length + (Path.EndsInDirectorySeparator(entry.RootDirectory) ? 0 : 1))..];
             if (Path.DirectorySeparatorChar == '\\')
             {
                 below = below.ToString().Replace('\\', '/');

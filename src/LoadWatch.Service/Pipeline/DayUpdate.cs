@@ -31,7 +31,8 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
     /// <summary>Dates through which people are computed, by person, where it is not the last date that is over for them.</summary>
     public IReadOnlyDictionary<string, LocalDate> Through { get; init; } = new Dictionary<string, LocalDate>();
 
-    public void Run(CancellationToken cancel)
+    /// <param name="last">Written in the commit of the last people, or in one of its own where nobody's days are computed: every commit waits for the disk.</param>
+    public void Run(CancellationToken cancel, Action<StoreSession>? last = null)
     {
         var behind = store.Read(session =>
         {
@@ -45,13 +46,26 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
                 .Where(item => item.From is not null)
                 .ToList();
         });
-        foreach (var group in behind.Chunk(PeopleInOneCommit))
+        var groups = behind.Chunk(PeopleInOneCommit).ToList();
+        foreach (var group in groups)
         {
             cancel.ThrowIfCancellationRequested();
             var computed = group.AsParallel().AsOrdered().Select(item => Compute(item.person, item.From!.Value)).ToList();
-            store.Write(session => computed.ForEach(series => series.Write(session)));
+            store.Write(session =>
+            {
+                computed.ForEach(series => series.Write(session));
+                if (group == groups[^1])
+                {
+                    last?.Invoke(session);
+                }
+            });
             report.PeopleComputed += computed.Count;
             report.Advanced();
+        }
+
+        if (groups.Count == 0 && last is not null)
+        {
+            store.Write(last);
         }
     }
 

@@ -27,6 +27,12 @@ public sealed class SweepReport
     /// <summary>All arrivals after the sweep, by state.</summary>
     public IReadOnlyDictionary<ArrivalState, int> InAll { get; set; } = new Dictionary<ArrivalState, int>();
 
+    /// <summary>Contents decoded again because what their rows stand on has changed.</summary>
+    public int Recomputed { get; set; }
+
+    /// <summary>People of whom some content is still to be decoded again with the configuration as it is now; their findings stand on what is stored.</summary>
+    public int PeopleBehind { get; set; }
+
     /// <summary>People whose days were computed.</summary>
     public int PeopleComputed { get; set; }
 

@@ -20,6 +20,8 @@ public sealed class ActivityTable
 
     private const string InsertHistogram = "INSERT INTO histogram (activity, channel, bins) VALUES (@activity, @channel, @bins)";
 
+    private const string Update = "UPDATE activity SET times_in_zone = @TimesInZone, remarks = @Remarks, quantities = @Quantities WHERE key = @Key";
+
     // Its histograms go with it.
     private const string Delete = "DELETE FROM activity WHERE key = @key";
 
@@ -31,6 +33,7 @@ public sealed class ActivityTable
 
     private const string InDates = " WHERE a.date >= @from AND a.date <= @to";
     private const string OfPersonInDates = InDates + " AND a.person = @person";
+    private const string SelectHistograms = "SELECT channel, bins FROM histogram WHERE activity = @key";
     private const string SelectHistogram = "SELECT bins FROM histogram WHERE activity = @key AND channel = @channel";
 
     private readonly StoreSession session;
@@ -45,6 +48,9 @@ public sealed class ActivityTable
         session.ExecuteEach(InsertHistogram, HistogramRows(activity));
     }
 
+    /// <summary>Stores what histograms and reference values tell in place of what they told; all else stays.</summary>
+    public void Renew(StoredActivity activity) => session.Execute(Update, ActivityRow.From(activity));
+
     /// <summary>Removes an activity; nothing when there is none.</summary>
     public void Remove(string key) => session.Execute(Delete, new { key });
 
@@ -55,6 +61,14 @@ public sealed class ActivityTable
     /// <summary>Everybody's activities whose date is in the range, both ends included, sorted by date, start and key.</summary>
     public IReadOnlyList<StoredActivity> All(LocalDate? from = null, LocalDate? to = null) =>
         Select(InDates, new { from = from ?? LocalDate.MinIsoValue, to = to ?? LocalDate.MaxIsoValue });
+
+    /// <summary>Time by value of every channel that has one.</summary>
+    public IReadOnlyDictionary<Channel, Histogram> Histograms(string key)
+    {
+        var histograms = new Dictionary<Channel, Histogram>();
+        session.EachRow(SelectHistograms, new { key }, row => histograms[Words<Channel>.Parse(row.GetString(0))] = HistogramCodec.Read((byte[])row.GetValue(1)));
+        return histograms;
+    }
 
     /// <summary>Time by value of one channel, or null where the activity has none.</summary>
     public Histogram? Histogram(string key, Channel channel) =>

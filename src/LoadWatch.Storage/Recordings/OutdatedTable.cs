@@ -4,10 +4,9 @@ using NodaTime;
 
 namespace LoadWatch.Storage.Recordings;
 
-/// <summary>A content whose rows stand on a basis that has changed.</summary>
-/// <param name="Person">Id of its owner; of an archive file that of its members; empty where it has none or several.</param>
-/// <param name="ObjectSha">The original that it is in.</param>
-public sealed record OutdatedContent(string Person, string ObjectSha, string Sha);
+/// <summary>An original with contents whose rows stand on a basis that has changed.</summary>
+/// <param name="Person">Id of the contents' owner; of an archive file that of its members; empty where there is none.</param>
+public sealed record OutdatedObject(string Person, string ObjectSha);
 
 /// <summary>
 /// Table <c>outdated</c>: contents to be decoded and judged again; their rows stand until then. What waits and what ends the process that decodes it is
@@ -34,13 +33,15 @@ public sealed class OutdatedTable
         Mark + " AND a.sha IN (SELECT r.sha FROM recording r WHERE r.person = @person AND r.start >= @from AND r.start < @to)" + Once;
 
     private const string SelectNext = """
-        SELECT person, object_sha, sha FROM outdated
-        WHERE (person, object_sha, sha) > (@Person, @ObjectSha, @Sha) ORDER BY person, object_sha, sha LIMIT @count
+        SELECT DISTINCT person, object_sha FROM outdated
+        WHERE (person, object_sha) > (@Person, @ObjectSha) ORDER BY person, object_sha LIMIT @count
         """;
 
-    private const string SelectOfObject = "SELECT person, object_sha, sha FROM outdated WHERE person = @person AND object_sha = @objectSha ORDER BY sha";
+    private const string SelectOfObject = "SELECT sha FROM outdated WHERE person = @Person AND object_sha = @ObjectSha ORDER BY sha";
     private const string Delete = "DELETE FROM outdated WHERE sha = @Sha";
     private const string CountAll = "SELECT COUNT(*) FROM outdated";
+
+    private const string CountObjects = "SELECT COUNT(*) FROM (SELECT DISTINCT person, object_sha FROM outdated)";
 
     private const string CountPeople = """
         SELECT COUNT(*) FROM (
@@ -48,7 +49,7 @@ public sealed class OutdatedTable
             UNION SELECT r.person FROM outdated o JOIN recording r ON r.sha = o.sha)
         """;
 
-    private static readonly OutdatedContent First = new("", "", "");
+    private static readonly OutdatedObject BeforeAll = new("", "");
 
     private readonly StoreSession session;
 
@@ -70,33 +71,31 @@ public sealed class OutdatedTable
     public void AddRecordings(string person, Instant from, Instant to) =>
         session.Execute(MarkRecordings, new { person, from, to, most = ArrivalTable.MostAttempts });
 
-    /// <summary>The next ones, sorted by person, original and content.</summary>
+    /// <summary>The next originals, sorted by person and content.</summary>
     /// <param name="after">The last one seen; null begins.</param>
-    public IReadOnlyList<OutdatedContent> Next(OutdatedContent? after, int count)
+    public IReadOnlyList<OutdatedObject> Next(OutdatedObject? after, int count)
     {
-        var (person, objectSha, sha) = after ?? First;
-        return Select(SelectNext, new { Person = person, ObjectSha = objectSha, Sha = sha, count });
+        var (person, objectSha) = after ?? BeforeAll;
+        return session.Rows<Row>(SelectNext, new { Person = person, ObjectSha = objectSha, count }).ConvertAll(row => new OutdatedObject(row.Person, row.ObjectSha));
     }
 
-    /// <summary>Those of one original that count for one person.</summary>
-    public IReadOnlyList<OutdatedContent> OfObject(string person, string objectSha) => Select(SelectOfObject, new { person, objectSha });
+    /// <summary>SHA-256 of each outdated content of an original.</summary>
+    public IReadOnlyList<string> Of(OutdatedObject original) => session.Rows<string>(SelectOfObject, original);
 
     public void Done(IEnumerable<string> shas) => session.ExecuteEach(Delete, shas.Select(sha => new { Sha = sha }));
 
     public int Count() => session.Value<int>(CountAll);
 
+    /// <summary>Number of originals, counted for each person.</summary>
+    public int Objects() => session.Value<int>(CountObjects);
+
     /// <summary>Number of people of whom some content is outdated.</summary>
     public int People() => session.Value<int>(CountPeople);
-
-    private List<OutdatedContent> Select(string sql, object values) =>
-        session.Rows<Row>(sql, values).ConvertAll(row => new OutdatedContent(row.Person, row.ObjectSha, row.Sha));
 
     private sealed class Row
     {
         public string Person { get; init; } = "";
 
         public string ObjectSha { get; init; } = "";
-
-        public string Sha { get; init; } = "";
     }
 }
