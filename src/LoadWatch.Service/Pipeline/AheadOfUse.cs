@@ -1,7 +1,7 @@
 namespace LoadWatch.Service.Pipeline;
 
 /// <summary>Lets the source work on the next element while the current one is used.</summary>
-internal static class AheadOfUse
+public static class AheadOfUse
 {
     /// <summary>
     /// The elements in their order, made one ahead on another thread; so one more than is used is held at any time. What the source throws is thrown where its
