@@ -8,9 +8,33 @@ namespace LoadWatch.Benchmarks;
 /// <summary>Three hours at 1 Hz with power, heart rate, speed, cadence and distance; deterministic.</summary>
 internal static class LongRide
 {
-    private const int Seconds = 3 * 3600;
+    public const int Seconds = 3 * 3600;
+
+    private const int FileId = 0;
+    private const int ActivityFile = 4;
+    private const int Record = 20;
+    private const long FitEpoch = 631065600;
+
+    /// <summary>Time, latitude, longitude, altitude, distance, speed, accumulated power, power, grade, heart rate, cadence, temperature.</summary>
+    private static readonly (byte Number, FitBaseType Type)[] Fields =
+    [
+        (253, FitBaseType.Unsigned32),
+        (0, FitBaseType.Signed32),
+        (1, FitBaseType.Signed32),
+        (78, FitBaseType.Unsigned32),
+        (5, FitBaseType.Unsigned32),
+        (73, FitBaseType.Unsigned32),
+        (29, FitBaseType.Unsigned32),
+        (7, FitBaseType.Unsigned16),
+        (9, FitBaseType.Signed16),
+        (3, FitBaseType.Unsigned8),
+        (4, FitBaseType.Unsigned8),
+        (13, FitBaseType.Signed8),
+    ];
 
     private static readonly Instant Start = Instant.FromUtc(2026, 3, 10, 7, 0);
+
+    public static LocalDate Date { get; } = new(2026, 3, 10);
 
     public static Person Person { get; } = new("p1", "Ada Example", "g1", 1990, Sex.Female, DateTimeZone.Utc);
 
@@ -29,6 +53,35 @@ internal static class LongRide
         Sport = new Sport("cycling"),
         Samples = [.. Enumerable.Range(0, Seconds).Select(Sample)],
     });
+
+    /// <summary>The same ride as a device writes it that knows its place and temperature too.</summary>
+    public static byte[] FileOfTwelveFields()
+    {
+        var writer = new FitPartWriter()
+            .Define(0, new(FileId, new FitFieldLayout(0, FitBaseType.Enumeration)))
+            .Message(0, ActivityFile)
+            .Define(1, new(Record, [.. Fields.Select(field => new FitFieldLayout(field.Number, field.Type))]));
+        for (var second = 0; second < Seconds; second++)
+        {
+            var sample = Sample(second);
+            writer.Message(
+                1,
+                Start.ToUnixTimeSeconds() - FitEpoch + second,
+                600_000_000 + (second * 90),
+                100_000_000 + (second * 40),
+                (500 + (100 + (20 * Math.Sin(second / 900.0)))) * 5,
+                sample.Distance * 100,
+                sample.Speed * 1000,
+                second * 190L,
+                sample.Power,
+                100 * Math.Sin(second / 900.0),
+                sample.HeartRate,
+                sample.Cadence,
+                17);
+        }
+
+        return writer.ToBytes();
+    }
 
     private static FitSample Sample(int second)
     {

@@ -48,13 +48,11 @@ public static class ActivityComputation
             return null;
         }
 
-        var milliseconds = channel.Samples.Sum(sample => (long)sample.Milliseconds);
-        return Significant.Round(milliseconds == 0
-            ? channel.Samples.Average(sample => sample.Value)
-            : channel.Samples.Sum(sample => sample.Value * sample.Milliseconds) / milliseconds);
+        var milliseconds = channel.Milliseconds();
+        return Significant.Round(milliseconds == 0 ? channel.PlainMean() : channel.ValueMilliseconds() / milliseconds);
     }
 
-    private static double? Largest(UsableChannel? channel) => channel?.Samples.Max(sample => sample.Value);
+    private static double? Largest(UsableChannel? channel) => channel?.Extremes().Largest;
 
     private static string TooLittle(UsableChannel channel)
     {

@@ -16,13 +16,20 @@ public static class ChannelLimits
 
     /// <summary>
     /// Heart rate 25 to 250 bpm (so 0, a lost contact, and 254, a code for none, are out); power 0 to 3000 W; speed 0 to 45 m/s, on foot and in team sports
-    /// to 13 m/s; every other channel up to 1e9. Never true for NaN or infinity.
+    /// to 13 m/s; every other channel up to 1e9, above or below 0.
     /// </summary>
-    public static bool Usable(Channel channel, double value, Sport sport) => channel switch
+    public static (double Least, double Most) Of(Channel channel, Sport sport) => channel switch
     {
-        Channel.HeartRate => value is >= 25 and <= 250,
-        Channel.Power => value is >= 0 and <= 3000,
-        Channel.Speed => value >= 0 && value <= (sport.IsOnFoot || sport.IsTeamSport ? FastestOnFoot : 45),
-        _ => Math.Abs(value) <= Largest,
+        Channel.HeartRate => (25, 250),
+        Channel.Power => (0, 3000),
+        Channel.Speed => (0, sport.IsOnFoot || sport.IsTeamSport ? FastestOnFoot : 45),
+        _ => (-Largest, Largest),
     };
+
+    /// <summary>Whether a reading lies within its limits; never true for NaN or infinity.</summary>
+    public static bool Usable(Channel channel, double value, Sport sport)
+    {
+        var (least, most) = Of(channel, sport);
+        return value >= least && value <= most;
+    }
 }

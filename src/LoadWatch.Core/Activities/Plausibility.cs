@@ -48,15 +48,16 @@ public static class Plausibility
     /// <summary>The top speed that three readings in a row show, at 1 s or more: one jump of a position decides nothing.</summary>
     private static double? HeldForThree(UsableChannel speed)
     {
-        if (SpeedTop.MetresPerSecond(speed) is not { } top || speed.Samples.Count < 3)
+        if (SpeedTop.MetresPerSecond(speed) is not { } top || speed.Count < 3)
         {
             return null;
         }
 
+        var values = speed.Values;
         var three = 0.0;
-        for (var at = 2; at < speed.Samples.Count; at++)
+        for (var at = 2; at < values.Length; at++)
         {
-            three = Math.Max(three, Math.Min(speed.Samples[at].Value, Math.Min(speed.Samples[at - 1].Value, speed.Samples[at - 2].Value)));
+            three = Math.Max(three, Math.Min(values[at], Math.Min(values[at - 1], values[at - 2])));
         }
 
         return Math.Min(top, three);

@@ -82,13 +82,13 @@ public static class RecordingCut
     /// <summary>The largest usable reading less the smallest: a running total may have begun before the window.</summary>
     private static double? DistanceMetres(Recording kept)
     {
-        var readings = UsableSamples.Of(kept, Channel.Distance).Samples;
-        return readings.Count == 0 ? null : readings.Max(reading => reading.Value) - readings.Min(reading => reading.Value);
+        var readings = UsableSamples.Of(kept, Channel.Distance);
+        return readings.Count > 0 && readings.Extremes() is var (smallest, largest) ? largest - smallest : null;
     }
 
     private static bool HoldsUsable(Recording rest) =>
         rest.Sets.Any(set => set.Active)
-        || UsableSamples.ChannelsOf(rest).Any(channel => UsableSamples.Of(rest, channel).Samples.Count > 0);
+        || UsableSamples.ChannelsOf(rest).Any(channel => UsableSamples.Of(rest, channel).Count > 0);
 
     /// <summary>From the edge of the window to the furthest moment left out, minutes rounded up.</summary>
     private static IEnumerable<string> Phrase(List<Instant> leftOut, Instant edge, string side) => leftOut.Count == 0

@@ -13,7 +13,8 @@ public sealed class UsableRecording
     {
         this.shareWanted = shareWanted;
         Recording = recording;
-        Channels = UsableSamples.ChannelsOf(recording).ToDictionary(channel => channel, channel => UsableSamples.Of(recording, channel));
+        var timeline = SampleTimeline.Of(recording.Samples.Times);
+        Channels = UsableSamples.ChannelsOf(recording).ToDictionary(channel => channel, channel => UsableSamples.Of(recording, channel, timeline));
         Histograms = Counted
             .Where(channel => this[channel] is not null)
             .ToDictionary(channel => channel, channel => ChannelHistogram.Of(Channels[channel]));
@@ -29,7 +30,7 @@ public sealed class UsableRecording
 
     /// <summary>The channel, or null where it was not recorded or too little of it is usable.</summary>
     public UsableChannel? this[Channel channel] =>
-        Channels.TryGetValue(channel, out var found) && found.Samples.Count > 0 && found.Share >= shareWanted ? found : null;
+        Channels.TryGetValue(channel, out var found) && found.Count > 0 && found.Share >= shareWanted ? found : null;
 
     /// <summary>Channels that were recorded, but of which too little is usable.</summary>
     public IEnumerable<UsableChannel> TooLittle => Channels.Values.Where(channel => this[channel.Channel] is null);

@@ -14,104 +14,79 @@ public static class UsableSamples
     /// <summary>The longest time that one reading may stand for, milliseconds. A choice: it bridges sparse recording, not a stop.</summary>
     public const int LongestMilliseconds = 10_000;
 
+    /// <summary>Milliseconds in seconds; mostly it is one.</summary>
+    internal static double Seconds(int milliseconds) => milliseconds == 1000 ? 1 : milliseconds / 1000.0;
+
     /// <summary>The channels with a reading, heart rate also where beats came only in messages of their own.</summary>
     public static IEnumerable<Channel> ChannelsOf(Recording recording) =>
-        Enum.GetValues<Channel>().Where(channel =>
+        SampleSeries.EveryChannel.Where(channel =>
             recording.Samples.Has(channel) || (channel == Channel.HeartRate && recording.LateHeartRates.Count > 0));
 
-    public static UsableChannel Of(Recording recording, Channel channel)
+    public static UsableChannel Of(Recording recording, Channel channel) => Of(recording, channel, SampleTimeline.Of(recording.Samples.Times));
+
+    /// <summary>The same where the time line of the recording's samples is known.</summary>
+    internal static UsableChannel Of(Recording recording, Channel channel, SampleTimeline timeline)
     {
-        var rows = DatedRows(recording.Samples, channel);
         if (channel == Channel.HeartRate && recording.LateHeartRates.Count > 0)
         {
-            rows.AddRange(LateRows(recording.LateHeartRates, rows));
+            var (times, values) = LateBeatRows.With(recording.Samples, recording.LateHeartRates);
+            var withBeats = SampleTimeline.Of(times);
+            return Of(channel, recording.Sport, withBeats, withBeats.Ordered(values));
         }
 
-        SortByTime(rows);
-        var usable = rows.TrueForAll(row => ChannelLimits.Usable(channel, row.Value, recording.Sport))
-            ? rows
-            : rows.FindAll(row => ChannelLimits.Usable(channel, row.Value, recording.Sport));
-        return new UsableChannel(channel, WithDurations(usable), Share(usable, rows));
+        return recording.Samples.Column(channel) is { } column
+            ? Of(channel, recording.Sport, timeline, timeline.Ordered(column))
+            : new UsableChannel(channel, [], [], [], 0, share: 0);
     }
 
-    private static List<Row> DatedRows(SampleSeries series, Channel channel)
+    private static UsableChannel Of(Channel channel, Sport sport, SampleTimeline timeline, double[] values)
     {
-        var times = series.UnixMilliseconds;
-        var column = series[channel];
-        var rows = new List<Row>(times.Length);
-        for (var row = 0; row < times.Length; row++)
+        var range = ChannelLimits.Of(channel, sport);
+        var count = Count(values, range);
+        if (count == values.Length)
         {
-            if (times[row] != SampleSeries.Undated)
+            return new UsableChannel(channel, timeline.Times, values, timeline.Milliseconds, count, Share(timeline.TotalMilliseconds, timeline, count));
+        }
+
+        var (usableTimes, usableValues, milliseconds) = (new long[count], new double[count], new int[count]);
+        Keep(timeline.Times, values, range, usableTimes, usableValues);
+        var total = SampleTimeline.Durations(usableTimes, milliseconds);
+        return new UsableChannel(channel, usableTimes, usableValues, milliseconds, count, Share(total, timeline, count));
+    }
+
+    private static int Count(ReadOnlySpan<double> values, (double Least, double Most) range)
+    {
+        var count = 0;
+        foreach (var value in values)
+        {
+            count += value >= range.Least && value <= range.Most ? 1 : 0;
+        }
+
+        return count;
+    }
+
+    private static void Keep(
+        ReadOnlySpan<long> times, ReadOnlySpan<double> values, (double Least, double Most) range, Span<long> usableTimes, Span<double> usableValues)
+    {
+        var kept = 0;
+        for (var row = 0; row < values.Length; row++)
+        {
+            if (values[row] >= range.Least && values[row] <= range.Most)
             {
-                rows.Add(new Row(times[row], column.IsEmpty ? double.NaN : column[row]));
+                usableTimes[kept] = times[row];
+                usableValues[kept] = values[row];
+                kept++;
             }
         }
-
-        return rows;
     }
 
-    /// <summary>Beats of their own join at their own times; within one second a usable reading of the records wins.</summary>
-    private static List<Row> LateRows(IReadOnlyList<TimedHeartRate> late, List<Row> rows)
+    private static double Share(long usable, SampleTimeline timeline, int count)
     {
-        var taken = rows.Where(row => ChannelLimits.Usable(Channel.HeartRate, row.Value, Sport.Generic)).Select(row => Second(row.Time)).ToHashSet();
-        return late
-            .Where(beat => !taken.Contains(Second(beat.UnixMilliseconds)))
-            .Select(beat => new Row(beat.UnixMilliseconds, beat.BeatsPerMinute))
-            .ToList();
-    }
-
-    private static long Second(long milliseconds) => (long)Math.Floor(milliseconds / 1000.0);
-
-    private static void SortByTime(List<Row> rows)
-    {
-        for (var row = 1; row < rows.Count; row++)
+        if (timeline.TotalMilliseconds == 0)
         {
-            if (rows[row].Time < rows[row - 1].Time)
-            {
-                var sorted = rows.OrderBy(one => one.Time).ToList();
-                rows.Clear();
-                rows.AddRange(sorted);
-                return;
-            }
-        }
-    }
-
-    private static UsableSample[] WithDurations(List<Row> rows)
-    {
-        var samples = new UsableSample[rows.Count];
-        for (var row = 0; row < samples.Length; row++)
-        {
-            samples[row] = new UsableSample(rows[row].Time, rows[row].Value, Duration(rows, row));
+            return count > 0 ? 1 : 0;
         }
 
-        return samples;
+        return Math.Min(1, (double)usable / timeline.TotalMilliseconds);
     }
-
-    /// <summary>Unsigned, so that times from both ends of the range do not overflow: the later row comes second.</summary>
-    private static int Duration(List<Row> rows, int row) =>
-        row == rows.Count - 1 ? 0 : (int)Math.Min(LongestMilliseconds, unchecked((ulong)(rows[row + 1].Time - rows[row].Time)));
-
-    private static double Share(List<Row> usable, List<Row> all)
-    {
-        var sampled = Total(all);
-        if (sampled == 0)
-        {
-            return usable.Count > 0 ? 1 : 0;
-        }
-
-        return Math.Min(1, (double)Total(usable) / sampled);
-    }
-
-    private static long Total(List<Row> rows)
-    {
-        var total = 0L;
-        for (var row = 0; row < rows.Count; row++)
-        {
-            total += Duration(rows, row);
-        }
-
-        return total;
-    }
-
-    private readonly record struct Row(long Time, double Value);
 }

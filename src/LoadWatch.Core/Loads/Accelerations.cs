@@ -22,49 +22,59 @@ public static class Accelerations
     /// <summary>Counts, 0 or more; null where half of the readings or more are further apart than 0.2 s.</summary>
     public static (int Accelerations, int Decelerations)? Of(UsableChannel speed)
     {
-        UsableSample[] samples = [.. speed.Samples.Where(sample => sample.Milliseconds > 0)];
-        if (MedianStep(samples) is not { } step || step > SlowestStepMilliseconds)
+        if (!MostAreWithin(SlowestStepMilliseconds, speed))
         {
             return null;
         }
 
-        var heldWanted = step <= FastStepMilliseconds ? 500 : 1000;
-        var (rises, falls) = (new Tally(heldWanted), new Tally(heldWanted));
-        for (var at = 0; at < samples.Length; at++)
+        var heldWanted = MostAreWithin(FastStepMilliseconds, speed) ? 500 : 1000;
+        var (rises, falls, held) = (new Tally(heldWanted), new Tally(heldWanted), speed.Held());
+        for (var at = 0; at < held.Count; at++)
         {
-            var slope = Slope(samples, at);
-            rises.Add(slope, samples[at].Milliseconds);
-            falls.Add(-slope, samples[at].Milliseconds);
+            var slope = Slope(held.UnixMilliseconds, held.Values, at);
+            rises.Add(slope, held.Milliseconds[at]);
+            falls.Add(-slope, held.Milliseconds[at]);
         }
 
         return (rises.Count, falls.Count);
     }
 
-    private static int? MedianStep(UsableSample[] samples)
+    /// <summary>Whether the median step, the upper one of two, is no longer than this; false without any step.</summary>
+    private static bool MostAreWithin(int longest, UsableChannel speed)
     {
-        int[] steps = [.. samples.Select(sample => sample.Milliseconds).Order()];
-        return steps.Length == 0 ? null : steps[steps.Length / 2];
+        var (within, steps) = (0, 0);
+        foreach (var step in speed.Milliseconds)
+        {
+            steps += step > 0 ? 1 : 0;
+            within += step > 0 && step <= longest ? 1 : 0;
+        }
+
+        return within > steps / 2;
     }
 
     /// <summary>Metres per second squared, rounded so that 2.5 held as 2.4999999 counts; null where too few readings are near.</summary>
-    private static double? Slope(UsableSample[] samples, int at)
+    private static double? Slope(ReadOnlySpan<long> times, ReadOnlySpan<double> speeds, int at)
     {
         var (count, t, v, tt, tv) = (0, 0.0, 0.0, 0.0, 0.0);
-        for (var near = FirstNear(samples, at); near < samples.Length && IsNear(samples, at, near); near++)
+        for (var near = FirstNear(times, at); near < times.Length && (near <= at || AreNear(times[at], times[near])); near++)
         {
-            var seconds = (samples[near].UnixMilliseconds - samples[at].UnixMilliseconds) / 1000.0;
-            var speed = samples[near].Value;
-            (count, t, v, tt, tv) = (count + 1, t + seconds, v + speed, tt + (seconds * seconds), tv + (seconds * speed));
+            var seconds = (times[near] - times[at]) / 1000.0;
+            var speed = speeds[near];
+            count++;
+            t += seconds;
+            v += speed;
+            tt += seconds * seconds;
+            tv += seconds * speed;
         }
 
         var spread = (count * tt) - (t * t);
         return count >= 3 && spread > 0 ? Math.Round(((count * tv) - (t * v)) / spread, 6) : null;
     }
 
-    private static int FirstNear(UsableSample[] samples, int at)
+    private static int FirstNear(ReadOnlySpan<long> times, int at)
     {
         var first = at;
-        while (first > 0 && IsNear(samples, at, first - 1))
+        while (first > 0 && AreNear(times[first - 1], times[at]))
         {
             first--;
         }
@@ -73,11 +83,7 @@ public static class Accelerations
     }
 
     /// <summary>Unsigned, so that times from both ends of the range do not overflow.</summary>
-    private static bool IsNear(UsableSample[] samples, int at, int other)
-    {
-        var (earlier, later) = at < other ? (at, other) : (other, at);
-        return unchecked((ulong)(samples[later].UnixMilliseconds - samples[earlier].UnixMilliseconds)) <= ReachMilliseconds;
-    }
+    private static bool AreNear(long earlier, long later) => unchecked((ulong)(later - earlier)) <= ReachMilliseconds;
 
     private sealed class Tally(int heldWanted)
     {

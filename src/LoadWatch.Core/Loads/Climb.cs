@@ -17,23 +17,23 @@ public static class Climb
     public static double Metres(UsableChannel altitude)
     {
         var climbed = 0.0;
-        var low = altitude.Samples[0].Value;
+        var low = altitude.Values[0];
         double? high = null;
-        foreach (var sample in altitude.Samples)
+        foreach (var metres in altitude.Values)
         {
             if (high is not { } top)
             {
-                low = Math.Min(low, sample.Value);
-                high = Turned(sample.Value - low) ? sample.Value : null;
+                low = Math.Min(low, metres);
+                high = Turned(metres - low) ? metres : null;
             }
-            else if (Turned(top - sample.Value))
+            else if (Turned(top - metres))
             {
                 climbed += top - low;
-                (low, high) = (sample.Value, null);
+                (low, high) = (metres, null);
             }
             else
             {
-                high = Math.Max(top, sample.Value);
+                high = Math.Max(top, metres);
             }
         }
 
@@ -41,5 +41,5 @@ public static class Climb
     }
 
     /// <summary>Rounded to a micrometre, so that 3 m held as 2.9999999 counts.</summary>
-    private static bool Turned(double metres) => Math.Round(metres, 6) >= TurnMetres;
+    private static bool Turned(double metres) => metres > TurnMetres - 0.001 && Math.Round(metres, 6) >= TurnMetres;
 }

@@ -41,7 +41,7 @@ public static class ExternalLoads
 
     /// <summary>Power times time over usable readings, kilojoules.</summary>
     public static double WorkKilojoules(UsableChannel power) =>
-        Significant.Round(power.Samples.Sum(sample => sample.Value * sample.Milliseconds) / 1e6);
+        Significant.Round(power.ValueMilliseconds() / 1e6);
 
     /// <summary>
     /// What the session states, else the largest reading less the smallest, metres: readings are a running total, which in a file of several sessions
@@ -54,12 +54,13 @@ public static class ExternalLoads
             return Significant.Round(stated);
         }
 
-        if (!usable.Channels.TryGetValue(Channel.Distance, out var distance) || distance.Samples.Count == 0)
+        if (!usable.Channels.TryGetValue(Channel.Distance, out var distance) || distance.Count == 0)
         {
             return null;
         }
 
-        return Significant.Round(distance.Samples.Max(sample => sample.Value) - distance.Samples.Min(sample => sample.Value));
+        var (smallest, largest) = distance.Extremes();
+        return Significant.Round(largest - smallest);
     }
 
     private static double? Time(double? seconds) => seconds is { } known && double.IsFinite(known) && known >= 0 ? known : null;

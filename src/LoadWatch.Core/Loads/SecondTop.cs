@@ -14,39 +14,36 @@ public static class SecondTop
     /// <summary>In the unit of the channel; null where the readings do not stand for 1 s together.</summary>
     public static double? Of(UsableChannel channel)
     {
-        var held = channel.Samples.Where(sample => sample.Milliseconds > 0).ToArray();
-        double? top = null;
-        for (var first = 0; first < held.Length; first++)
+        var held = channel.Held();
+        var values = held.Values;
+        var top = double.NegativeInfinity;
+        for (var first = 0; first < values.Length; first++)
         {
-            if (SlowestOfOneSecond(held, first, top) is { } slowest)
-            {
-                top = slowest;
-            }
+            top = Math.Max(top, SlowestOfOneSecond(values[first..], held.Milliseconds[first..], top));
         }
 
-        return Significant.Round(top);
+        return double.IsFinite(top) ? Significant.Round(top) : null;
     }
 
-    /// <summary>The slowest reading of the second that begins with one, or null where that is no faster than the top so far or the readings end.</summary>
-    private static double? SlowestOfOneSecond(UsableSample[] held, int first, double? top)
+    /// <summary>The slowest reading of the second that begins in front; minus infinity where that is no faster than the top so far or the readings end.</summary>
+    private static double SlowestOfOneSecond(ReadOnlySpan<double> values, ReadOnlySpan<int> milliseconds, double top)
     {
-        var slowest = double.PositiveInfinity;
-        var milliseconds = 0;
-        for (var at = first; at < held.Length; at++)
+        var (slowest, held) = (double.PositiveInfinity, 0);
+        for (var at = 0; at < values.Length; at++)
         {
-            slowest = Math.Min(slowest, held[at].Value);
+            slowest = Math.Min(slowest, values[at]);
             if (slowest <= top)
             {
-                return null;
+                return double.NegativeInfinity;
             }
 
-            milliseconds += held[at].Milliseconds;
-            if (milliseconds >= HeldMilliseconds)
+            held += milliseconds[at];
+            if (held >= HeldMilliseconds)
             {
                 return slowest;
             }
         }
 
-        return null;
+        return double.NegativeInfinity;
     }
 }

@@ -45,9 +45,21 @@ public static class ZoneTimes
         foreach (var (bin, time) in histogram.Bins)
         {
             var value = (double)bin / ChannelHistogram.BinsPerUnit(channel);
-            milliseconds[rounded.Count(bound => value >= bound)] += time;
+            milliseconds[Zone(value, rounded)] += time;
         }
 
         return new TimeInZone(channel, basis, rounded, [.. milliseconds.Select(time => Significant.Round(time / 1000.0))], estimated);
+    }
+
+    /// <summary>How many of the bounds a value has reached.</summary>
+    private static int Zone(double value, double[] bounds)
+    {
+        var zone = 0;
+        foreach (var bound in bounds)
+        {
+            zone += value >= bound ? 1 : 0;
+        }
+
+        return zone;
     }
 }

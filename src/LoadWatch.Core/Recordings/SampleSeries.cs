@@ -11,6 +11,8 @@ public sealed class SampleSeries
     /// <summary>The time of a row that carries none.</summary>
     public const long Undated = long.MinValue;
 
+    private static readonly Channel[] Every = Enum.GetValues<Channel>();
+
     private readonly long[] times;
     private readonly double[]?[] columns;
 
@@ -22,7 +24,7 @@ public sealed class SampleSeries
         ArgumentNullException.ThrowIfNull(unixMilliseconds);
         ArgumentNullException.ThrowIfNull(columns);
         times = unixMilliseconds;
-        this.columns = new double[]?[Enum.GetValues<Channel>().Length];
+        this.columns = new double[]?[Every.Length];
         foreach (var (channel, values) in columns)
         {
             if (values.Length != times.Length)
@@ -44,7 +46,7 @@ public sealed class SampleSeries
     public ReadOnlySpan<long> UnixMilliseconds => times;
 
     /// <summary>The channels that hold at least one reading.</summary>
-    public IEnumerable<Channel> Channels => Enum.GetValues<Channel>().Where(Has);
+    public IEnumerable<Channel> Channels => Every.Where(Has);
 
     /// <summary>The column of a channel, one value per row, NaN where a row has no reading; empty if the channel was never recorded.</summary>
     public ReadOnlySpan<double> this[Channel channel] => columns[(int)channel];
@@ -53,10 +55,40 @@ public sealed class SampleSeries
     public bool Has(Channel channel) => columns[(int)channel] is { } values && Array.Exists(values, value => !double.IsNaN(value));
 
     /// <summary>Earliest dated row, or null.</summary>
-    public Instant? First => Extreme((a, b) => a < b);
+    public Instant? First
+    {
+        get
+        {
+            var first = long.MaxValue;
+            foreach (var time in times)
+            {
+                first = time < first && time != Undated ? time : first;
+            }
+
+            return Array.Exists(times, time => time != Undated) ? Instant.FromUnixTimeMilliseconds(first) : null;
+        }
+    }
 
     /// <summary>Latest dated row, or null.</summary>
-    public Instant? Last => Extreme((a, b) => a > b);
+    public Instant? Last
+    {
+        get
+        {
+            var last = Undated;
+            foreach (var time in times)
+            {
+                last = Math.Max(last, time);
+            }
+
+            return last == Undated ? null : Instant.FromUnixTimeMilliseconds(last);
+        }
+    }
+
+    /// <summary>Every channel that there is, in its order.</summary>
+    internal static IReadOnlyList<Channel> EveryChannel => Every;
+
+    /// <summary>The times themselves, to be shared, never written.</summary>
+    internal long[] Times => times;
 
     /// <summary>The rows named by their number from 0, in the order given; channels without a reading in them are left out.</summary>
     public SampleSeries Take(IReadOnlyList<int> rows)
@@ -72,6 +104,9 @@ public sealed class SampleSeries
     public SampleSeries Without(params IReadOnlyCollection<Channel> channels) =>
         new(times, Channels.Except(channels).ToDictionary(channel => channel, channel => columns[(int)channel]!));
 
+    /// <summary>A column itself, to be shared, never written; null if the channel was never recorded.</summary>
+    internal double[]? Column(Channel channel) => columns[(int)channel];
+
     private static T[] Of<T>(T[] column, IReadOnlyList<int> rows)
     {
         var taken = new T[rows.Count];
@@ -81,19 +116,5 @@ public sealed class SampleSeries
         }
 
         return taken;
-    }
-
-    private Instant? Extreme(Func<long, long, bool> better)
-    {
-        long? found = null;
-        foreach (var time in times)
-        {
-            if (time != Undated && (found is not { } best || better(time, best)))
-            {
-                found = time;
-            }
-        }
-
-        return found is { } value ? Instant.FromUnixTimeMilliseconds(value) : null;
     }
 }

@@ -30,22 +30,22 @@ public sealed record HeartRateDrive(HeartRateReserve Reserve, double Threshold, 
     public double Of(double fraction, Variant variant) =>
         Math.Min(1, variant.CriticalDrive * fraction / variant.Capacity(Threshold, RelativeError));
 
-    /// <summary>Fraction of the reserve at each reading, from the mean of the readings of the 15 s up to it.</summary>
-    public double[] SmoothedFractions(IReadOnlyList<UsableSample> heartRate)
+    /// <summary>Fills in the fraction of the reserve at each reading, from the mean of the readings of the 15 s up to it.</summary>
+    /// <param name="fractions">Room for one per reading.</param>
+    public void SmoothFractions(UsableChannel heartRate, Span<double> fractions)
     {
-        var fractions = new double[heartRate.Count];
+        var times = heartRate.UnixMilliseconds;
+        var values = heartRate.Values;
         var (oldest, sum) = (0, 0.0);
-        for (var sample = 0; sample < fractions.Length; sample++)
+        for (var sample = 0; sample < values.Length; sample++)
         {
-            sum += heartRate[sample].Value;
-            while (heartRate[sample].UnixMilliseconds - heartRate[oldest].UnixMilliseconds >= SmoothingMilliseconds)
+            sum += values[sample];
+            while (times[sample] - times[oldest] >= SmoothingMilliseconds)
             {
-                sum -= heartRate[oldest++].Value;
+                sum -= values[oldest++];
             }
 
             fractions[sample] = Reserve.Fraction(sum / (sample - oldest + 1));
         }
-
-        return fractions;
     }
 }

@@ -1,3 +1,4 @@
+using System.Buffers;
 using LoadWatch.Activities;
 
 namespace LoadWatch.Stimulus;
@@ -6,13 +7,26 @@ namespace LoadWatch.Stimulus;
 /// E.</summary>
 public static class HeartRateStimulus
 {
-    /// <param name="heartRate">Usable readings in time order, bpm.</param>
-    public static EnduranceEstimate Of(IReadOnlyList<UsableSample> heartRate, HeartRateDrive drive)
+    /// <param name="heartRate">Usable readings, bpm.</param>
+    public static EnduranceEstimate Of(UsableChannel heartRate, HeartRateDrive drive)
     {
-        var fractions = drive.SmoothedFractions(heartRate);
-        var low = Read(heartRate, fractions, drive, Variant.Low);
-        var mid = Read(heartRate, fractions, drive, Variant.Mid);
-        var high = Read(heartRate, fractions, drive, Variant.High);
+        var fractions = ArrayPool<double>.Shared.Rent(heartRate.Count);
+        try
+        {
+            drive.SmoothFractions(heartRate, fractions);
+            return Of(fractions, heartRate.Milliseconds, drive);
+        }
+        finally
+        {
+            ArrayPool<double>.Shared.Return(fractions);
+        }
+    }
+
+    private static EnduranceEstimate Of(double[] fractions, ReadOnlySpan<int> milliseconds, HeartRateDrive drive)
+    {
+        var low = Read(fractions, milliseconds, drive, Variant.Low);
+        var mid = Read(fractions, milliseconds, drive, Variant.Mid);
+        var high = Read(fractions, milliseconds, drive, Variant.High);
         return new EnduranceEstimate(
             Grade.E,
             StimulusChannels.HeartRate,
@@ -23,13 +37,19 @@ public static class HeartRateStimulus
             ["bouts and the largest class: heart rate cannot show them; power with critical_power and power_max, or logged sets, would"]);
     }
 
-    private static ClassFractions Read(
-        IReadOnlyList<UsableSample> heartRate, double[] fractions, HeartRateDrive drive, Variant variant)
+    private static ClassFractions Read(ReadOnlySpan<double> fractions, ReadOnlySpan<int> milliseconds, HeartRateDrive drive, Variant variant)
     {
         var seconds = default(ClassFractions);
-        for (var sample = 0; sample < fractions.Length; sample++)
+        var (before, recruited) = (double.NaN, default(ClassFractions));
+        for (var sample = 0; sample < milliseconds.Length; sample++)
         {
-            seconds += variant.Recruitment.At(drive.Of(fractions[sample], variant)) * heartRate[sample].Seconds;
+            if (fractions[sample] != before)
+            {
+                before = fractions[sample];
+                recruited = variant.Recruitment.At(drive.Of(before, variant));
+            }
+
+            seconds += recruited * UsableSamples.Seconds(milliseconds[sample]);
         }
 
         return seconds;

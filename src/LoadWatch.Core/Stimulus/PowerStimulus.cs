@@ -1,3 +1,4 @@
+using System.Buffers;
 using LoadWatch.Activities;
 
 namespace LoadWatch.Stimulus;
@@ -5,12 +6,27 @@ namespace LoadWatch.Stimulus;
 /// <summary>Reads power second by second: relative drive from critical power, maximal power and the balance of W', then the pool.</summary>
 public static class PowerStimulus
 {
-    /// <param name="power">Usable readings in time order, W.</param>
-    public static EnduranceEstimate Of(IReadOnlyList<UsableSample> power, PowerCapacity capacity)
+    /// <summary>Devices write whole watts and few different ones: up to here what they ask for is kept where it follows from them alone.</summary>
+    private const int KeptWatts = 512;
+
+    public static EnduranceEstimate Of(UsableChannel power, PowerCapacity capacity)
     {
-        var low = Read(power, capacity, Variant.Low);
-        var mid = Read(power, capacity, Variant.Mid);
-        var high = Read(power, capacity, Variant.High);
+        var kept = ArrayPool<Reading>.Shared.Rent(KeptWatts);
+        try
+        {
+            return Of(power, capacity, kept);
+        }
+        finally
+        {
+            ArrayPool<Reading>.Shared.Return(kept);
+        }
+    }
+
+    private static EnduranceEstimate Of(UsableChannel power, PowerCapacity capacity, Span<Reading> kept)
+    {
+        var low = Read(power, capacity, Variant.Low, kept);
+        var mid = Read(power, capacity, Variant.Mid, kept);
+        var high = Read(power, capacity, Variant.High, kept);
         var trueMaximum = capacity.Maximum is not null;
         return new EnduranceEstimate(
             capacity.Grade,
@@ -22,34 +38,45 @@ public static class PowerStimulus
             capacity.NotSeen);
     }
 
-    /// <summary>The relative drive at each sample, 0 to 1.</summary>
-    public static double[] Drives(IReadOnlyList<UsableSample> power, PowerCapacity capacity, Variant variant)
+    private static (ClassFractions Seconds, int Bouts) Read(UsableChannel power, PowerCapacity capacity, Variant variant, Span<Reading> kept)
     {
-        var critical = variant.Capacity(capacity.Critical.Value, CapacityError.Of(capacity.Critical.Source));
-        double? maximum = capacity.Maximum is { } max ? variant.Capacity(max.Value, CapacityError.Of(max.Source)) : null;
-        double? wPrime = capacity.WPrime is { } anchor ? variant.Capacity(anchor.Value, CapacityError.WPrime) : null;
-        var balances = wPrime is { } full && maximum is not null ? WPrimeBalance.Of(power, critical, full) : null;
-        var drives = new double[power.Count];
-        for (var sample = 0; sample < drives.Length; sample++)
+        var times = power.UnixMilliseconds;
+        var values = power.Values;
+        var milliseconds = power.Milliseconds;
+        var drive = new PowerDrive(power, capacity, variant);
+        var bouts = new HardBouts();
+        var sum = default(ClassFractions);
+        kept.Clear();
+        for (var at = 0; at < values.Length; at++)
         {
-            var balance = balances is null ? 1 : balances[sample] / wPrime!.Value;
-            drives[sample] = Drive.Of(power[sample].Value, critical, maximum, balance, variant.CriticalDrive);
+            var seconds = UsableSamples.Seconds(milliseconds[at]);
+            drive.Advance(times[at], values[at], seconds);
+            var reading = At(values[at], drive, variant.Recruitment, kept);
+            sum += reading.Recruited * seconds;
+            bouts.Add(times[at], milliseconds[at], reading.Drive);
         }
 
-        return drives;
+        return (sum, bouts.Count);
     }
 
-    private static (ClassFractions Seconds, int Bouts) Read(IReadOnlyList<UsableSample> power, PowerCapacity capacity, Variant variant)
+    private static Reading At(double watts, in PowerDrive drive, Recruitment recruitment, Span<Reading> kept)
     {
-        var drives = Drives(power, capacity, variant);
-        var bouts = new HardBouts();
-        var seconds = default(ClassFractions);
-        for (var sample = 0; sample < drives.Length; sample++)
+        var whole = unchecked((int)watts);
+        if ((uint)whole >= (uint)kept.Length || whole != watts || !drive.IsFresh(watts))
         {
-            seconds += variant.Recruitment.At(drives[sample]) * power[sample].Seconds;
-            bouts.Add(power[sample].UnixMilliseconds, power[sample].Milliseconds, drives[sample]);
+            return Reading.Of(drive.At(watts), recruitment);
         }
 
-        return (seconds, bouts.Count);
+        if (!kept[whole].IsKnown)
+        {
+            kept[whole] = Reading.Of(drive.At(watts), recruitment);
+        }
+
+        return kept[whole];
+    }
+
+    private readonly record struct Reading(double Drive, ClassFractions Recruited, bool IsKnown)
+    {
+        public static Reading Of(double drive, Recruitment recruitment) => new(drive, recruitment.At(drive), IsKnown: true);
     }
 }

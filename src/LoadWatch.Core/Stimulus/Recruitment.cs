@@ -18,7 +18,11 @@ public readonly record struct ClassFractions(double Slow, double Medium, double 
 /// </summary>
 public sealed class Recruitment
 {
+    /// <summary>Equal steps of drive in which the search for a threshold begins.</summary>
+    private const int Steps = 1024;
+
     private readonly double[] thresholds;
+    private readonly byte[] joinedBefore = new byte[Steps + 1];
     private readonly int slow;
     private readonly int medium;
     private readonly int large;
@@ -27,6 +31,10 @@ public sealed class Recruitment
     {
         thresholds = [.. pool.ForceFractions];
         (slow, medium, large) = shares.Split(pool);
+        for (var step = 0; step <= Steps; step++)
+        {
+            joinedBefore[step] = (byte)thresholds.Count(threshold => threshold <= step / (double)Steps);
+        }
     }
 
     /// <param name="drive">Relative drive, 0 to 1.</param>
@@ -41,13 +49,7 @@ public sealed class Recruitment
 
     private double UnitsAt(double drive)
     {
-        var found = Array.BinarySearch(thresholds, drive);
-        if (found >= 0)
-        {
-            return found + 1;
-        }
-
-        var joined = ~found;
+        var joined = Joined(drive);
         if (joined == 0 || joined == thresholds.Length)
         {
             return joined;
@@ -56,6 +58,25 @@ public sealed class Recruitment
         return joined + ((drive - thresholds[joined - 1]) / (thresholds[joined] - thresholds[joined - 1]));
     }
 
-    private static double Fraction(double units, int smaller, int size) =>
-        units < smaller + 1 ? 0 : Math.Min(1, (units - smaller) / size);
+    /// <summary>How many thresholds the drive has reached.</summary>
+    private int Joined(double drive)
+    {
+        int joined = joinedBefore[unchecked((int)(Math.Clamp(drive, 0, 1) * Steps))];
+        while (joined < thresholds.Length && thresholds[joined] <= drive)
+        {
+            joined++;
+        }
+
+        return joined;
+    }
+
+    private static double Fraction(double units, int smaller, int size)
+    {
+        if (units < smaller + 1)
+        {
+            return 0;
+        }
+
+        return units - smaller >= size ? 1 : (units - smaller) / size;
+    }
 }

@@ -55,11 +55,11 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
     {
         if (usable[Channel.Power] is { } power && capacity is not null)
         {
-            return PowerStimulus.Of(power.Samples, capacity);
+            return PowerStimulus.Of(power, capacity);
         }
 
         return usable[Channel.HeartRate] is { } heartRate && HeartRateReserve.On(date, person, anchors).Reserve is { } reserve
-            ? HeartRateStimulus.Of(heartRate.Samples, HeartRateDrive.On(date, person.Id, anchors, reserve))
+            ? HeartRateStimulus.Of(heartRate, HeartRateDrive.On(date, person.Id, anchors, reserve))
             : EnduranceEstimate.Nothing with { NotSeen = [NoChannel] };
     }
 

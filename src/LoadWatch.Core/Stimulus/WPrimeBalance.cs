@@ -10,44 +10,53 @@ namespace LoadWatch.Stimulus;
 /// Departures: the sum is carried along, so that each sample costs the same; where no sample lies below critical power nothing recovers;
 /// time that no reading stands for (stops) recovers but does not spend.
 /// </summary>
-public static class WPrimeBalance
+public struct WPrimeBalance
 {
+    private readonly double criticalPowerWatts;
+    private readonly double wPrimeJoules;
+    private readonly double tau;
+    private readonly double decayOfSecond;
+    private double spent;
+    private double spending;
+    private long before;
+
+    /// <param name="power">All readings of the session; they are asked for one after the other.</param>
+    public WPrimeBalance(UsableChannel power, double criticalPowerWatts, double wPrimeJoules)
+    {
+        this.criticalPowerWatts = criticalPowerWatts;
+        this.wPrimeJoules = wPrimeJoules;
+        tau = MeanBelow(power, criticalPowerWatts) is { } mean ? Tau(criticalPowerWatts - mean) : double.PositiveInfinity;
+        decayOfSecond = Math.Exp(-1 / tau);
+        before = power.Count > 0 ? power.UnixMilliseconds[0] : 0;
+    }
+
     /// <summary>Seconds, for D in watts (0 or more).</summary>
     public static double Tau(double belowCriticalWatts) => (546 * Math.Exp(-0.01 * belowCriticalWatts)) + 316;
 
-    /// <summary>The balance at the time of each sample, before its own work, joules; below 0 when more was spent than the anchors
+    /// <summary>The balance at the time of the next reading, before its own work, joules; below 0 when more was spent than the anchors
     /// allow.</summary>
-    public static double[] Of(IReadOnlyList<UsableSample> power, double criticalPowerWatts, double wPrimeJoules)
+    public double Next(long unixMilliseconds, double watts, double seconds)
     {
-        var tau = MeanBelow(power, criticalPowerWatts) is { } mean ? Tau(criticalPowerWatts - mean) : double.PositiveInfinity;
-        var decayOfSecond = Math.Exp(-1 / tau);
-        var balances = new double[power.Count];
-        var spent = 0.0;
-        for (var sample = 0; sample < balances.Length; sample++)
-        {
-            if (sample > 0)
-            {
-                var before = power[sample - 1];
-                var apart = power[sample].UnixMilliseconds - before.UnixMilliseconds;
-                var decay = apart == 1000 ? decayOfSecond : Math.Exp(-apart / 1000.0 / tau);
-                spent = (spent * decay) + (Math.Max(0, before.Value - criticalPowerWatts) * before.Seconds);
-            }
-
-            balances[sample] = wPrimeJoules - spent;
-        }
-
-        return balances;
+        var apart = unixMilliseconds - before;
+        var decay = apart == 1000 ? decayOfSecond : Math.Exp(-apart / 1000.0 / tau);
+        spent = (spent * decay) + spending;
+        spending = Math.Max(0, watts - criticalPowerWatts) * seconds;
+        before = unixMilliseconds;
+        return wPrimeJoules - spent;
     }
 
-    private static double? MeanBelow(IReadOnlyList<UsableSample> power, double criticalPowerWatts)
+    private static double? MeanBelow(UsableChannel power, double criticalPowerWatts)
     {
+        var values = power.Values;
+        var milliseconds = power.Milliseconds;
         var (sum, seconds) = (0.0, 0.0);
-        foreach (var sample in power)
+        for (var at = 0; at < values.Length && at < milliseconds.Length; at++)
         {
-            if (sample.Value < criticalPowerWatts)
+            if (values[at] < criticalPowerWatts)
             {
-                sum += sample.Value * sample.Seconds;
-                seconds += sample.Seconds;
+                var apart = UsableSamples.Seconds(milliseconds[at]);
+                sum += values[at] * apart;
+                seconds += apart;
             }
         }
 

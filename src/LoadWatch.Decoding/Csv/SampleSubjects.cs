@@ -10,6 +10,7 @@ internal sealed class SampleSubjects(CsvTable table, CsvLayout layout)
     private const int LongestCharacters = 100;
 
     private readonly int? column = table.Find(layout.PersonColumn);
+    private readonly CellTexts names = new(table.Find(layout.PersonColumn) ?? 0);
     private readonly Dictionary<string, int> rowsOf = RowCounts(table, layout.PersonColumn);
     private readonly Dictionary<string, SampleSubject> known = new(StringComparer.Ordinal);
     private readonly List<SampleSubject> inOrder = [];
@@ -19,7 +20,7 @@ internal sealed class SampleSubjects(CsvTable table, CsvLayout layout)
     /// <returns>Null with the problem, for a row that belongs to nobody.</returns>
     public SampleSubject? Of(CsvRows rows, out Problem? problem)
     {
-        var name = column is { } index ? rows.Text(index) : "";
+        var name = column is null ? "" : names.Of(rows);
         if (known.TryGetValue(name, out var found))
         {
             problem = null;
@@ -59,10 +60,11 @@ internal sealed class SampleSubjects(CsvTable table, CsvLayout layout)
             return counts;
         }
 
+        var texts = new CellTexts(column);
         using var rows = table.Rows();
         while (rows.Next())
         {
-            var name = column < rows.CellCount ? rows.Text(column) : "";
+            var name = column < rows.CellCount ? texts.Of(rows) : "";
             if (counts.TryGetValue(name, out var count) || counts.Count < SubjectsAtMost)
             {
                 counts[name] = count + 1;

@@ -10,8 +10,42 @@ internal static class StrictNumber
 {
     private const int LongestBytes = 64;
 
+    /// <summary>So many digits make a whole number that a double holds exactly.</summary>
+    private const int ExactDigits = 15;
+
+    private static readonly double[] PowersOfTen = [1, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8, 1e9, 1e10, 1e11, 1e12, 1e13, 1e14];
+
     /// <summary>False for anything else, and for what no double can hold.</summary>
-    public static bool TryRead(ReadOnlySpan<byte> cell, char decimalMark, out double value)
+    public static bool TryRead(ReadOnlySpan<byte> cell, char decimalMark, out double value) =>
+        TryReadPlain(cell, (byte)decimalMark, out value) || TryReadAny(cell, decimalMark, out value);
+
+    /// <summary>Few digits without sign and exponent: one division of two exact numbers, which rounds as reading the text would.</summary>
+    private static bool TryReadPlain(ReadOnlySpan<byte> cell, byte decimalMark, out double value)
+    {
+        var (digits, mark) = (0L, -1);
+        value = 0;
+        for (var at = 0; at < cell.Length && at <= ExactDigits; at++)
+        {
+            if (cell[at] == decimalMark && mark < 0)
+            {
+                mark = at;
+            }
+            else if (cell[at] is >= (byte)'0' and <= (byte)'9')
+            {
+                digits = (digits * 10) + (cell[at] - '0');
+            }
+            else
+            {
+                return false;
+            }
+        }
+
+        var behind = mark < 0 ? 0 : cell.Length - 1 - mark;
+        value = digits / PowersOfTen[Math.Min(behind, ExactDigits - 1)];
+        return cell.Length is > 0 and <= ExactDigits && mark != 0 && mark != cell.Length - 1;
+    }
+
+    private static bool TryReadAny(ReadOnlySpan<byte> cell, char decimalMark, out double value)
     {
         value = 0;
         Span<byte> plain = stackalloc byte[LongestBytes];

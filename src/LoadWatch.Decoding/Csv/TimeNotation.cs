@@ -10,6 +10,10 @@ internal readonly record struct WrittenTime(Instant? Instant, Offset? Offset, Lo
 /// <summary>One way of writing a moment.</summary>
 internal abstract class TimeNotation
 {
+    private readonly byte[] lastCell = new byte[64];
+    private int lastLength;
+    private WrittenTime last;
+
     /// <summary>What makes a format unusable, to be put behind the key's name, or null.</summary>
     public static string? Complaint(string format) => format switch
     {
@@ -28,7 +32,22 @@ internal abstract class TimeNotation
         _ => new PatternNotation(format),
     };
 
-    public abstract bool TryRead(ReadOnlySpan<byte> cell, out WrittenTime time);
+    /// <summary>What a cell says. Rows of many people stand moment by moment, so the last cell is kept: most say the same.</summary>
+    public bool TryRead(ReadOnlySpan<byte> cell, out WrittenTime time)
+    {
+        if (lastLength > 0 && cell.SequenceEqual(lastCell.AsSpan(0, lastLength)))
+        {
+            time = last;
+            return true;
+        }
+
+        var found = TryReadNew(cell, out time);
+        last = time;
+        lastLength = found && cell.TryCopyTo(lastCell) ? cell.Length : 0;
+        return found;
+    }
+
+    protected abstract bool TryReadNew(ReadOnlySpan<byte> cell, out WrittenTime time);
 
     /// <summary>Only the years 1 to 9998, so that an offset, a zone or a year from the start never leads out of the calendar.</summary>
     private static bool IsPlaceable(LocalDateTime local) => local.Year is >= 1 and <= 9998;
@@ -57,7 +76,7 @@ internal sealed class UnixNotation(double millisecondsPerUnit, char decimalMark)
     private const double Earliest = -62_135_596_800_000;
     private const double Latest = 253_370_764_799_999;
 
-    public override bool TryRead(ReadOnlySpan<byte> cell, out WrittenTime time)
+    protected override bool TryReadNew(ReadOnlySpan<byte> cell, out WrittenTime time)
     {
         time = default;
         if (!StrictNumber.TryRead(cell, decimalMark, out var number) || Milliseconds(number) is not { } milliseconds)
@@ -94,7 +113,7 @@ internal sealed class IsoNotation : TimeNotation
         OffsetDateTimePattern.CreateWithInvariantCulture(Moment + "o<+HH>"),
     ];
 
-    public override bool TryRead(ReadOnlySpan<byte> cell, out WrittenTime time)
+    protected override bool TryReadNew(ReadOnlySpan<byte> cell, out WrittenTime time)
     {
         var text = Text(cell);
         if (text.Length <= DateLength)
@@ -167,7 +186,7 @@ internal sealed class PatternNotation : TimeNotation
         }
     }
 
-    public override bool TryRead(ReadOnlySpan<byte> cell, out WrittenTime time) => withOffset is not null
+    protected override bool TryReadNew(ReadOnlySpan<byte> cell, out WrittenTime time) => withOffset is not null
         ? TryRead(withOffset, Text(cell), offsetStated: true, out time)
         : TryRead(local!, Text(cell), out time);
 

@@ -9,6 +9,8 @@ namespace LoadWatch.Decoding.Csv;
 /// </summary>
 internal sealed class ZoneClock(DateTimeZone zone)
 {
+    private readonly SteadyOffset steady = new(zone);
+
     public LineCount Skipped { get; } = new();
 
     public LineCount Ambiguous { get; } = new();
@@ -17,6 +19,11 @@ internal sealed class ZoneClock(DateTimeZone zone)
 
     public Instant Place(LocalDateTime local, Instant? previous, long line)
     {
+        if (steady.Place(local) is { } sure)
+        {
+            return sure;
+        }
+
         var mapping = zone.MapLocal(local);
         switch (mapping.Count)
         {

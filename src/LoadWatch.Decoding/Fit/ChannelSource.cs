@@ -5,8 +5,14 @@ namespace LoadWatch.Decoding.Fit;
 /// <summary>A field of a record message that feeds a channel: value = raw / <paramref name="Scale"/> - <paramref name="Shift"/>.</summary>
 internal readonly record struct ChannelSource(Channel Channel, FieldSlot Slot, double Scale, double Shift)
 {
-    public double Read(ReadOnlySpan<byte> payload, bool bigEndian) =>
-        (FitNumber.FirstValid(payload.Slice(Slot.Offset, Slot.Size), Slot.Type, bigEndian) / Scale) - Shift;
+    private readonly bool isSingle = Slot.Count == 1;
+
+    public double Read(ReadOnlySpan<byte> payload, bool bigEndian)
+    {
+        var bytes = payload.Slice(Slot.Offset, Slot.Size);
+        var raw = isSingle ? FitNumber.Read(bytes, Slot.Type, bigEndian) : FitNumber.FirstValid(bytes, Slot.Type, bigEndian);
+        return (raw / Scale) - Shift;
+    }
 
     /// <summary>The source for a field of the profile, or null where the field feeds no channel.</summary>
     public static ChannelSource? Native(FieldSlot slot)

@@ -26,6 +26,13 @@ internal sealed record FitClock(long? UptimeZero)
         : UptimeZero is { } zero ? time + zero + (EpochUnixSeconds * 1000)
         : SampleSeries.Undated;
 
+    /// <summary>Makes a column of the part's times one of milliseconds since 1970.</summary>
+    public void ToUnix(long[] times)
+    {
+        for (var row = 0; row < times.Length; row++)
+            times[row] = UnixMilliseconds(times[row]);
+    }
+
     public Instant? Instant(long? time) =>
         time is { } known && UnixMilliseconds(known) is var unix and not SampleSeries.Undated
             ? NodaTime.Instant.FromUnixTimeMilliseconds(unix)

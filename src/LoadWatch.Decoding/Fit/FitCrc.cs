@@ -1,3 +1,5 @@
+using System.Buffers.Binary;
+
 namespace LoadWatch.Decoding.Fit;
 
 /// <summary>
@@ -26,13 +28,21 @@ public static class FitCrc
 
     private static ushort Step(ReadOnlySpan<byte> bytes, ushort crc)
     {
-        var tables = Tables;
-        var next = tables[(15 << 8) | (bytes[0] ^ (crc & 0xFF))] ^ tables[(14 << 8) | (bytes[1] ^ (crc >> 8))];
-        for (var i = 2; i < Stride; i++)
-            next ^= tables[((Stride - 1 - i) << 8) | bytes[i]];
-
-        return (ushort)next;
+        var (tables, size) = (Tables, sizeof(ulong));
+        var first = BinaryPrimitives.ReadUInt64LittleEndian(bytes) ^ crc;
+        var second = BinaryPrimitives.ReadUInt64LittleEndian(bytes[size..]);
+        return (ushort)(Eight(tables, size, first) ^ Eight(tables, 0, second));
     }
+
+    /// <summary>
+    /// The effect of eight bytes that are followed by as many as the number of the table that the last of them goes through. The first two wait for the
+    /// step before, so they come last.
+    /// </summary>
+    private static int Eight(ushort[] tables, int last, ulong bytes) =>
+        tables[At(last, bytes >> 56)] ^ tables[At(last + 1, bytes >> 48)] ^ tables[At(last + 2, bytes >> 40)] ^ tables[At(last + 3, bytes >> 32)]
+        ^ tables[At(last + 4, bytes >> 24)] ^ tables[At(last + 5, bytes >> 16)] ^ tables[At(last + 6, bytes >> 8)] ^ tables[At(last + 7, bytes)];
+
+    private static int At(int table, ulong bytes) => (table << 8) | (int)(bytes & 0xFF);
 
     private static ushort[] BuildTables()
     {

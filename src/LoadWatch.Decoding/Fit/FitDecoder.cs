@@ -95,6 +95,9 @@ public sealed class FitDecoder
         else
             Refuse(fault);
 
+        if (reader.Content != pending)
+            reader.Content.Samples.Return();
+
         return fault is not null && frame.IsUnclosed(bytes.Span) ? bytes.Length : frame.End;
     }
 
@@ -122,7 +125,10 @@ public sealed class FitDecoder
     private void Settle()
     {
         if (pending is { } content)
+        {
             recordings.AddRange(PartRecordings.Of(content, recordings.Count + 1));
+            content.Samples.Return();
+        }
 
         pending = null;
     }

@@ -75,11 +75,22 @@ internal sealed class FitPartReader
         if (plan.PayloadSize >= bytes.Length)
             return Fail("a message runs past the end of the data");
 
+        if (plan.IsColumnar && !isCompressed)
+            return ReadRun(new RecordRun(plan, bytes));
+
         var payload = bytes.Slice(1, plan.PayloadSize);
         var seconds = plan.Timestamp(payload) ?? (isCompressed ? Advanced(header & 0x1F) : null);
         clock = seconds ?? clock;
         Take(plan, payload, seconds * 1000L);
         return 1 + plan.PayloadSize;
+    }
+
+    private int ReadRun(in RecordRun run)
+    {
+        Content.Samples.Add(run);
+        clock = run.LastTimestamp ?? clock;
+        CheckBudget();
+        return run.Length;
     }
 
     /// <summary>The clock moved on to the next time with these low five bits.</summary>
@@ -97,6 +108,11 @@ internal sealed class FitPartReader
         else if (FitMessages.IsRead(plan.Message))
             Content.Read(new FitMessage(plan, payload), plan.Message, time);
 
+        CheckBudget();
+    }
+
+    private void CheckBudget()
+    {
         if (budget.Overspent)
             fault = "more messages than a file of this size can hold in reason";
     }

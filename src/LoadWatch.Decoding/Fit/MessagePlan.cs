@@ -27,6 +27,9 @@ internal sealed class MessagePlan
     /// <summary>Record messages: developer fields that stand for a field of the profile, as described when last bound.</summary>
     public ChannelSource[] Developer { get; private set; } = [];
 
+    /// <summary>Record messages with a time whose channels have one source each: they can be read field by field.</summary>
+    public bool IsColumnar { get; init; }
+
     /// <summary>Record messages: place of the three bytes of packed speed and distance, or -1.</summary>
     public int PackedOffset { get; init; } = -1;
 

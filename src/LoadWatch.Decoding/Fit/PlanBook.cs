@@ -4,7 +4,7 @@ namespace LoadWatch.Decoding.Fit;
 internal sealed class PlanBook
 {
     private const int MostKept = 256;
-    private readonly Dictionary<byte[], MessagePlan> plans = new(new ByContent());
+    private readonly Dictionary<byte[], MessagePlan> plans = new(new ByteContent());
 
     public MessagePlan Get(ReadOnlySpan<byte> definition) =>
         plans.GetAlternateLookup<ReadOnlySpan<byte>>().TryGetValue(definition, out var plan) ? plan : Add(definition);
@@ -15,23 +15,5 @@ internal sealed class PlanBook
             plans.Clear();
 
         return plans.GetAlternateLookup<ReadOnlySpan<byte>>()[definition] = PlanCompiler.Compile(definition);
-    }
-
-    private sealed class ByContent : IEqualityComparer<byte[]>, IAlternateEqualityComparer<ReadOnlySpan<byte>, byte[]>
-    {
-        public bool Equals(byte[]? x, byte[]? y) => x.AsSpan().SequenceEqual(y);
-
-        public bool Equals(ReadOnlySpan<byte> alternate, byte[] other) => alternate.SequenceEqual(other);
-
-        public int GetHashCode(byte[] obj) => GetHashCode(obj.AsSpan());
-
-        public int GetHashCode(ReadOnlySpan<byte> alternate)
-        {
-            var hash = new HashCode();
-            hash.AddBytes(alternate);
-            return hash.ToHashCode();
-        }
-
-        public byte[] Create(ReadOnlySpan<byte> alternate) => alternate.ToArray();
     }
 }

@@ -18,6 +18,8 @@ internal static class PlanCompiler
         var ends = FixedSize + (definition[4] * FieldSize);
         var developer = Developer(ends < definition.Length ? definition[(ends + 1)..] : [], nativeSize, out var size);
         var isRecord = message == FitMessages.Record;
+        var native = isRecord ? Native(fields) : [];
+        var packed = isRecord ? Packed(fields) : -1;
         return new MessagePlan
         {
             Message = message,
@@ -25,9 +27,11 @@ internal static class PlanCompiler
             PayloadSize = size,
             TimestampOffset = timestamp.Size == 4 ? timestamp.Offset : -1,
             Fields = FitMessages.IsRead(message) && !isRecord ? Array.FindAll(fields, field => field.Size > 0) : [],
-            Native = isRecord ? Native(fields) : [],
+            Native = native,
             DeveloperSlots = isRecord ? developer : [],
-            PackedOffset = isRecord ? Packed(fields) : -1,
+            PackedOffset = packed,
+            IsColumnar = isRecord && timestamp.Size == 4 && packed < 0 && developer.Length == 0
+                && native.DistinctBy(source => source.Channel).Count() == native.Length,
         };
     }
 

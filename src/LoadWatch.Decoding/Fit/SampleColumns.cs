@@ -41,9 +41,33 @@ internal sealed class SampleColumns
             Fill(plan.Developer, plan, payload, row, filled);
     }
 
+    /// <summary>Adds the rows of a run, each channel of which has one source.</summary>
+    public void Add(in RecordRun run)
+    {
+        for (var row = 0; row < run.Rows; row++)
+            times.Set(Count + row, run.Timestamp(row) is { } seconds ? seconds * 1000L : SampleSeries.Undated);
+
+        foreach (ref readonly var source in run.Sources)
+        {
+            var last = run.Read(source, channels[(int)source.Channel], Count);
+            if (source.Channel == Channel.Distance && double.IsFinite(last))
+                packed.Restart(last);
+        }
+
+        Count += run.Rows;
+    }
+
+    /// <summary>Gives all memory back; the columns are empty then.</summary>
+    public void Return()
+    {
+        times.Return();
+        Array.ForEach(channels, channel => channel.Return());
+        Count = 0;
+    }
+
     private int Fill(ChannelSource[] sources, MessagePlan plan, ReadOnlySpan<byte> payload, int row, int filled)
     {
-        foreach (var source in sources)
+        foreach (ref readonly var source in sources.AsSpan())
         {
             if (!Filled(filled, source.Channel) && source.Read(payload, plan.BigEndian) is var value && double.IsFinite(value))
                 filled |= Set(source.Channel, row, value);

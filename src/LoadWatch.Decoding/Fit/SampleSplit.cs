@@ -14,19 +14,20 @@ internal sealed class SampleSplit
         this.samples = samples;
         this.owners = owners;
         rowsOf = new int[owners.Count];
-        ForEachRow((_, owner) => rowsOf[owner]++);
+        ForEachRun((_, rows, owner) => rowsOf[owner] += rows);
     }
 
     /// <summary>One series per session, in the order of the sessions.</summary>
     public static SampleSeries[] Of(SampleColumns samples, FitClock clock, SessionOwners owners)
     {
         var split = new SampleSplit(samples, owners);
-        var times = split.Column(row => clock.UnixMilliseconds(samples.Times[row]));
+        var times = split.Columns(samples.Times);
+        Array.ForEach(times, clock.ToUnix);
         var channels = new Dictionary<Channel, double[][]>();
         foreach (var channel in Enum.GetValues<Channel>())
         {
             if (samples[channel] is { IsEmpty: false } column)
-                channels[channel] = split.Column(row => column[row]);
+                channels[channel] = split.Columns(column);
         }
 
         return [.. Enumerable.Range(0, owners.Count).Select(i => new SampleSeries(times[i], Recorded(channels, i)))];
@@ -37,22 +38,34 @@ internal sealed class SampleSplit
             .Where(channel => Array.Exists(channel.Value[session], value => !double.IsNaN(value)))
             .ToDictionary(channel => channel.Key, channel => channel.Value[session]);
 
-    private T[][] Column<T>(Func<int, T> value)
+    private T[][] Columns<T>(SparseColumn<T> column)
+        where T : struct
     {
-        var columns = Array.ConvertAll(rowsOf, rows => new T[rows]);
+        var columns = Array.ConvertAll(rowsOf, rows => GC.AllocateUninitializedArray<T>(rows));
         var filled = new int[rowsOf.Length];
-        ForEachRow((row, owner) => columns[owner][filled[owner]++] = value(row));
+        ForEachRun((first, rows, owner) =>
+        {
+            column.CopyTo(first, columns[owner].AsSpan(filled[owner], rows));
+            filled[owner] += rows;
+        });
         return columns;
     }
 
-    private void ForEachRow(Action<int, int> take)
+    /// <summary>Rows that follow each other and belong to one session: first row, number of rows, session.</summary>
+    private void ForEachRun(Action<int, int, int> take)
     {
-        var owner = owners.Of(null);
-        for (var row = 0; row < samples.Count; row++)
+        var (first, owner) = (0, owners.Of(null));
+        for (var row = 0; row < samples.Count && owners.Count > 1; row++)
         {
             var time = samples.Times[row];
-            owner = time == SampleSeries.Undated ? owner : owners.Of(time);
-            take(row, owner);
+            var next = time == SampleSeries.Undated ? owner : owners.Of(time);
+            if (next == owner)
+                continue;
+
+            take(first, row - first, owner);
+            (first, owner) = (row, next);
         }
+
+        take(first, samples.Count - first, owner);
     }
 }

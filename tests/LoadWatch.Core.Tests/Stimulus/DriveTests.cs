@@ -1,3 +1,6 @@
+using LoadWatch.Activities;
+using LoadWatch.Recordings;
+
 namespace LoadWatch.Stimulus;
 
 public class DriveTests
@@ -15,7 +18,7 @@ public class DriveTests
     {
         var capacity = PowerCapacity.On(Given.Date, "p1", Given.Anchors(Given.Cyclist))!;
 
-        Assert.Equal(drive, PowerStimulus.Drives(Given.Samples((350, 200)), capacity, Variant.Mid)[second], 5e-5);
+        Assert.Equal(drive, Drives(new UsableChannel(Channel.Power, Given.Samples((350, 200)), 1), capacity)[second], 5e-5);
     }
 
     /// <summary>Morton 1996: time to exhaustion W'/(P - CP) - W'/(Pmax - CP), computed from the equation. There the drive just reaches
@@ -41,4 +44,17 @@ public class DriveTests
 
     private static double DriveAfter(double watts, double seconds) =>
         Drive.Of(watts, 250, 1000, (20_000 - ((watts - 250) * seconds)) / 20_000, 0.65);
+
+    private static List<double> Drives(UsableChannel power, PowerCapacity capacity)
+    {
+        var drive = new PowerDrive(power, capacity, Variant.Mid);
+        var drives = new List<double>();
+        foreach (var sample in power.Samples)
+        {
+            drive.Advance(sample.UnixMilliseconds, sample.Value, sample.Milliseconds / 1000.0);
+            drives.Add(drive.At(sample.Value));
+        }
+
+        return drives;
+    }
 }

@@ -1,3 +1,5 @@
+using LoadWatch.Recordings;
+using LoadWatch.Activities;
 using LoadWatch.Loads;
 using LoadWatch.People;
 
@@ -27,7 +29,9 @@ public class HeartRateDriveTests
     [Fact]
     public void ReadingsAreSmoothedOverTheFifteenSecondsUpToThem()
     {
-        var fractions = HeartRateDrive.On(Given.Date, "p1", AnchorBook.Empty, Reserve).SmoothedFractions(Given.Samples((100, 60), (150, 60)));
+        var heartRate = new UsableChannel(Channel.HeartRate, Given.Samples((100, 60), (150, 60)), 1);
+        var fractions = new double[heartRate.Count];
+        HeartRateDrive.On(Given.Date, "p1", AnchorBook.Empty, Reserve).SmoothFractions(heartRate, fractions);
 
         Assert.Equal(0.5, fractions[59], 1e-12);
         Assert.Equal(((10 * 0.5) + 5) / 15, fractions[64], 1e-12);

@@ -57,6 +57,25 @@ public class RecruitmentTests
         Assert.Equal(large, fractions.Large, 0.12);
     }
 
+    /// <summary>The definition, taken literally, at the thresholds themselves too: how many units have joined, and where between two the drive lies.</summary>
+    [Fact]
+    public void TheFractionsFollowFromTheThresholdsReached() =>
+        Gen.OneOf(Gen.Double[0, 1], Gen.Int[0, MotorUnitPool.Units - 1].Select(unit => MotorUnitPool.Usual.ForceFractions[unit])).Sample(drive =>
+        {
+            var thresholds = MotorUnitPool.Usual.ForceFractions;
+            var joined = thresholds.Count(threshold => threshold <= drive);
+            var units = joined is 0 or MotorUnitPool.Units
+                ? joined
+                : joined + ((drive - thresholds[joined - 1]) / (thresholds[joined] - thresholds[joined - 1]));
+            var (slow, medium, large) = ClassShares.Usual.Split(MotorUnitPool.Usual);
+
+            Assert.Equal(
+                new ClassFractions(Share(units, 0, slow), Share(units, slow, medium), Share(units, slow + medium, large)),
+                Variant.Mid.Recruitment.At(drive));
+
+            static double Share(double units, int smaller, int size) => units < smaller + 1 ? 0 : Math.Min(1, (units - smaller) / size);
+        });
+
     [Fact]
     public void NothingIsCalledOnAtRest() => Assert.Equal(default, Variant.Mid.Recruitment.At(0));
 

@@ -1,4 +1,5 @@
 using LoadWatch.Activities;
+using LoadWatch.Recordings;
 
 namespace LoadWatch.Stimulus;
 
@@ -26,14 +27,14 @@ public class WPrimeBalanceTests
     [InlineData(300, 11940.43)]
     public void SpendsAboveAndRecoversBelow(int second, double joules)
     {
-        var balances = WPrimeBalance.Of(Given.Samples((350, 60), (150, 60), (350, 60), (150, 120)), 250, 20_000);
+        var balances = Balances(Given.Samples((350, 60), (150, 60), (350, 60), (150, 120)), 250, 20_000);
 
         Assert.Equal(joules, balances[second], 5e-3);
     }
 
     [Fact]
     public void WithoutASecondBelowCriticalPowerNothingRecovers() =>
-        Assert.Equal(20_000 - (60 * 100), WPrimeBalance.Of(Given.Samples((350, 60)), 250, 20_000)[60], 1e-9);
+        Assert.Equal(20_000 - (60 * 100), Balances(Given.Samples((350, 60)), 250, 20_000)[60], 1e-9);
 
     /// <summary>By hand: 10 s at 350 W spend 1000 J; a stop of 600 s recovers with the time constant of 150 W (516.86 s), and the 10 s
     /// that the last reading stands for are the only ones that count.</summary>
@@ -42,8 +43,14 @@ public class WPrimeBalanceTests
     {
         UsableSample[] samples = [new(0, 350, 10_000), new(10_000, 150, 10_000), new(610_000, 150, 0)];
 
-        var balances = WPrimeBalance.Of(samples, 250, 20_000);
+        var balances = Balances(samples, 250, 20_000);
 
         Assert.Equal(20_000 - (1000 * Math.Exp(-600 / 516.8624)), balances[2], 1e-2);
+    }
+
+    private static List<double> Balances(UsableSample[] samples, double criticalPowerWatts, double wPrimeJoules)
+    {
+        var balance = new WPrimeBalance(new UsableChannel(Channel.Power, samples, 1), criticalPowerWatts, wPrimeJoules);
+        return [.. samples.Select(sample => balance.Next(sample.UnixMilliseconds, sample.Value, sample.Milliseconds / 1000.0))];
     }
 }

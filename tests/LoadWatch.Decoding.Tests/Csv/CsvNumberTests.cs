@@ -54,6 +54,15 @@ public class CsvNumberTests
             return Read(text, '.') == value && Read(text.Replace('.', ','), ',') == value;
         });
 
+    /// <summary>Short numbers with few digits behind the mark, zeros in front and behind among them, are read as the runtime reads them.</summary>
+    [Fact]
+    public void ShortNumbersAreReadToTheLastBit() =>
+        Gen.Select(Gen.Int[0, 99_999_999].Select(whole => whole >> (whole % 24)), Gen.Char['0', '9'].Array[0, 9].Select(digits => new string(digits))).Sample((whole, digits) =>
+        {
+            var text = digits.Length == 0 ? whole.ToString("000", CultureInfo.InvariantCulture) : $"{whole}.{digits}";
+            return Read(text, '.') == double.Parse(text, CultureInfo.InvariantCulture);
+        });
+
     private static double? Read(string cell, char mark)
     {
         var layout = BuiltInLayouts.Samples with { Decimal = mark, Delimiter = ';' };
