@@ -1,3 +1,4 @@
+using System.Globalization;
 using System.Runtime.InteropServices;
 using Microsoft.Win32.SafeHandles;
 
@@ -87,7 +88,7 @@ internal struct FileStatus
 
     public readonly bool IsFolder => (Mode & TypeMask) == FolderType;
 
-    public readonly string Id => FormattableString.Invariant($"{DeviceMajor}.{DeviceMinor}:{Inode}");
+    public readonly string Id => string.Create(CultureInfo.InvariantCulture, $"{DeviceMajor}.{DeviceMinor}:{Inode}");
 
     public readonly FileStamp Stamp => new((long)Size, (ModifiedSeconds * 1000) + (ModifiedNanoseconds / 1_000_000), Id);
 }

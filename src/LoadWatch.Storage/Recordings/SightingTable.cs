@@ -21,7 +21,9 @@ public sealed class SightingTable
     private const string Delete = "DELETE FROM sighting WHERE inbox = @Inbox AND path = @Path AND sha = @Sha";
     private const string SelectLatest = $"SELECT {Columns} FROM sighting WHERE inbox = @inbox AND latest = 1";
     private const string CountLatestOf = "SELECT COUNT(*) FROM sighting WHERE inbox = @inbox AND latest = 1";
-    private const string SelectStamps = "SELECT path, size, mtime, file_id FROM sighting WHERE inbox = @inbox AND latest = 1";
+
+    // The empty text keeps the index out of it: going through the table in its own order is faster than through a million places of it.
+    private const string SelectStamps = "SELECT path, size, mtime, file_id FROM sighting WHERE inbox || '' = @inbox AND latest = 1";
     private const string SelectStored = """
         SELECT s.sha, a.person, s.inbox, s.path FROM sighting s JOIN arrival a ON a.sha = s.sha WHERE a.state = 'stored' ORDER BY s.sha
         """;
