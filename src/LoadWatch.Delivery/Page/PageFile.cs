@@ -35,7 +35,7 @@ public sealed class PageFile(string folder) : INoticeChannel
 
     /// <summary>Rewrites a contact's newest page.</summary>
     public static ChannelOutcome Write(string folder, string contactId, string html) => IsFileName(contactId)
-        ? PrivateFolder.Use(folder, () => Replace(Path.Combine(folder, contactId + ".html"), html, flush: false))
+        ? PrivateFolder.Use(folder, () => Replace(Path.Combine(folder, contactId + ".html"), html, flush: false), sync: false)
         : NoFileName;
 
     private static ChannelOutcome NoFileName => ChannelOutcome.Failed(
