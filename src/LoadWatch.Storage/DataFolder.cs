@@ -26,15 +26,27 @@ public sealed class DataFolder
 
     public string LockPath { get; }
 
+    /// <summary>Names a data folder and touches nothing.</summary>
+    public static DataFolder At(string path) => new(Path.GetFullPath(path));
+
     /// <summary>Opens a data folder and creates what is missing of it.</summary>
     /// <exception cref="IOException">It cannot be created.</exception>
     /// <exception cref="UnauthorizedAccessException">It cannot be created.</exception>
     public static DataFolder Open(string path)
     {
-        var folder = new DataFolder(Path.GetFullPath(path));
+        var folder = At(path);
         folder.CreateMissing();
         return folder;
     }
+
+    /// <summary>Whether the archive holds an object.</summary>
+    public bool HoldsOriginals() => Objects().Any();
+
+    /// <summary>Paths of all objects of the archive, folder by folder.</summary>
+    public IEnumerable<string> Objects() => Directory.EnumerateDirectories(ArchivePath)
+        .Where(folder => folder != IncomingPath)
+        .Order(StringComparer.Ordinal)
+        .SelectMany(Directory.EnumerateFiles);
 
     /// <summary>The folder of the archive that holds the objects whose name begins with these two hex digits.</summary>
     public string ObjectFolder(string sha) => Path.Combine(ArchivePath, sha[..2]);

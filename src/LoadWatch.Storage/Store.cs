@@ -8,24 +8,39 @@ namespace LoadWatch.Storage;
 public sealed class Store : IDisposable
 {
     private readonly Dialect dialect;
-    private readonly DbConnection writer;
+    private readonly DatabaseFile file;
+    private readonly DbConnection? writer;
     private readonly Lock writing = new();
     private readonly ConcurrentBag<DbConnection> idleReaders = [];
-    private DbException? lost;
+    private DurabilityLostException? lost;
 
-    private Store(Dialect dialect)
+    private Store(Dialect dialect, DatabaseFile file, bool toWrite)
     {
         this.dialect = dialect;
-        writer = dialect.OpenWriter();
+        this.file = file;
+        writer = toWrite ? dialect.OpenWriter() : null;
     }
 
+    /// <summary>Number of schema scripts that this program knows.</summary>
+    public static int SchemaVersion => SqliteSchema.Scripts.Count;
+
     /// <summary>Opens the database of a data folder, creating or upgrading it first.</summary>
-    /// <exception cref="DatabaseRefusedException">Not a database of LoadWatch, or newer than this program.</exception>
+    /// <exception cref="DatabaseRefusedException">Not a database of LoadWatch, or newer than this program, or missing beside an archive that holds originals.</exception>
     public static Store Open(DataFolder folder)
     {
+        RefuseMissing(folder);
         var sqlite = new SqliteDialect(folder.DatabasePath);
         sqlite.Prepare();
-        return new Store(sqlite);
+        return new Store(sqlite, new DatabaseFile(folder.DatabasePath), toWrite: true);
+    }
+
+    /// <summary>Opens the database to look at it only, beside a service that writes: creates, upgrades and repairs nothing.</summary>
+    /// <exception cref="DatabaseRefusedException">There is none, or it is not one of this version of LoadWatch.</exception>
+    public static Store OpenToRead(DataFolder folder)
+    {
+        var sqlite = new SqliteDialect(folder.DatabasePath);
+        sqlite.RefuseUnprepared();
+        return new Store(sqlite, new DatabaseFile(folder.DatabasePath), toWrite: false);
     }
 
     /// <summary>Runs the work in one transaction: all of it is durable when this returns, none of it when it throws (I-4).</summary>
@@ -46,15 +61,21 @@ public sealed class Store : IDisposable
             RefuseAfterLoss();
             try
             {
-                using var transaction = dialect.BeginWrite(writer);
-                var result = work(new StoreSession(dialect, writer, transaction));
+                using var transaction = dialect.BeginWrite(Writer);
+                var result = work(new StoreSession(dialect, Writer, transaction));
+                file.Check();
                 transaction.Commit();
+                file.NoteLog();
                 return result;
             }
             catch (DbException error) when (dialect.LostDurability(error))
             {
+                throw lost = new DurabilityLostException(error);
+            }
+            catch (DurabilityLostException error)
+            {
                 lost = error;
-                throw new DurabilityLostException(error);
+                throw;
             }
         }
     }
@@ -74,23 +95,30 @@ public sealed class Store : IDisposable
         }
     }
 
-    /// <summary>After an erasure: brings what was erased out of the side files too. False when a reader was in the way: ask again.</summary>
+    /// <summary>
+    /// Empties the write-ahead log into the database: after an erasure, and when it has grown. False when a reader was in the way: ask again.
+    /// </summary>
     public bool Checkpoint()
     {
         lock (writing)
         {
             RefuseAfterLoss();
-            return dialect.Checkpoint(writer);
+            return dialect.Checkpoint(Writer);
         }
     }
 
-    /// <summary>What the engine finds wrong with its own file, in its words; empty when nothing.</summary>
+    /// <summary>What the engine finds wrong with its own file, in its words; empty when nothing. It reads all of it, and others may write meanwhile.</summary>
     public IReadOnlyList<string> Check()
     {
-        lock (writing)
-        {
-            return dialect.Check(writer);
-        }
+        using var reader = dialect.OpenReader();
+        return dialect.Check(reader);
+    }
+
+    /// <summary>Copies the database of this moment, to be opened on its own.</summary>
+    public void CopyTo(DataFolder other)
+    {
+        using var reader = dialect.OpenReader();
+        dialect.CopyTo(reader, other.DatabasePath);
     }
 
     public void Dispose()
@@ -100,7 +128,22 @@ public sealed class Store : IDisposable
             reader.Dispose();
         }
 
-        writer.Dispose();
+        writer?.Dispose();
+    }
+
+    private DbConnection Writer => writer ?? throw new InvalidOperationException("the store was opened to be read only");
+
+    // An empty database over an archive would take every original for new, and forget who was told what.
+    private static void RefuseMissing(DataFolder folder)
+    {
+        if (new FileInfo(folder.DatabasePath) is { Exists: true, Length: > 0 } || !folder.HoldsOriginals())
+        {
+            return;
+        }
+
+        throw new DatabaseRefusedException(
+            $"{folder.DatabasePath} is missing although the archive beside it holds originals: no empty one is made in its place. Put it back from a backup "
+            + "(deploy/README.md, Backing up and restoring), or, to begin anew, move the whole folder away: what is in the inboxes comes in again");
     }
 
     // After one failed sync the next may claim success over pages that the system has dropped: only a restart and a check tell.
@@ -108,11 +151,7 @@ public sealed class Store : IDisposable
     {
         if (lost is not null)
         {
-            throw new DurabilityLostException(lost);
+            throw lost;
         }
     }
 }
-
-/// <summary>The system could not make written bytes durable. Stop, check the disk, start again.</summary>
-public sealed class DurabilityLostException(Exception cause)
-    : Exception("the disk failed to keep what was written: nothing more is written until a restart", cause);

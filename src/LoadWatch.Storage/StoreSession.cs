@@ -8,10 +8,12 @@ using LoadWatch.Storage.Days;
 using LoadWatch.Storage.Decisions;
 using LoadWatch.Storage.Dialects;
 using LoadWatch.Storage.Findings;
+using LoadWatch.Storage.Inboxes;
 using LoadWatch.Storage.Notices;
 using LoadWatch.Storage.People;
 using LoadWatch.Storage.Recordings;
 using LoadWatch.Storage.Rows;
+using LoadWatch.Storage.Services;
 
 namespace LoadWatch.Storage;
 
@@ -48,6 +50,9 @@ public sealed class StoreSession
         Derived = new DerivedRows(this);
         Basis = new BasisTable(this);
         Audits = new AuditTable(this);
+        InboxRoots = new InboxRootTable(this);
+        Troubles = new TroubleTable(this);
+        Moments = new ServiceMomentTable(this);
     }
 
     public ArrivalTable Arrivals { get; }
@@ -89,6 +94,12 @@ public sealed class StoreSession
     public BasisTable Basis { get; }
 
     public AuditTable Audits { get; }
+
+    public InboxRootTable InboxRoots { get; }
+
+    public TroubleTable Troubles { get; }
+
+    public ServiceMomentTable Moments { get; }
 
     internal Dialect Dialect { get; }
 

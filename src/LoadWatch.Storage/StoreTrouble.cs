@@ -32,6 +32,11 @@ public static class StoreTroubles
     private const int CannotOpen = 14;
     private const int NotADatabase = 26;
 
+    /// <summary>What to do about <see cref="StoreTrouble.Damaged"/>.</summary>
+    public const string AdviceOfDamage =
+        "the database is damaged. Keep a copy of the data folder as it is, put the database back from a backup (deploy/README.md, Backing up and restoring), "
+        + "and let loadwatch verify look at it; what was computed from recordings comes back by loadwatch rebuild";
+
     public static StoreTrouble Of(DbException error) => (error as SqliteException)?.SqliteErrorCode switch
     {
         Corrupt or NotADatabase => StoreTrouble.Damaged,

@@ -28,7 +28,7 @@ public class ComputeBenchmarks
     public DecodedFile Decode() => FitDecoder.Decode(file);
 
     [Benchmark]
-    public RecordingSummary Summarize() => RecordingSummaries.Of("", recording, LongRide.Person, sourceName: null);
+    public RecordingSummary Summarize() => RecordingSummaries.Of("", new UsableRecording(recording, 0.5), LongRide.Person, sourceName: null);
 
     [Benchmark]
     public string? Judge() => Plausibility.Of(recording, LongRide.Person, LongRide.Anchors, LongRide.Date);

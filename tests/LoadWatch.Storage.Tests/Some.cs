@@ -30,12 +30,15 @@ internal static class Some
         ElapsedSeconds: 3600.25,
         TimerSeconds: null,
         "device 255/7/1234",
-        Channels: 3,
+        Channels: new ChannelExtents([new ChannelExtent(Channel.HeartRate, IsUsable: true, 5, 7), new ChannelExtent(Channel.Power, IsUsable: false, null, null)]),
         Samples: 3601,
         Sets: 4,
-        SamplesDigest: long.MinValue + number);
+        SamplesDigest: long.MinValue + number)
+    {
+        DistanceMetres = 0.1 + 0.2,
+    };
 
-    public static StoredActivity Activity(int number) => new(Recording(number), new ActivityValues(), [Recording(number).Key]);
+    public static StoredActivity Activity(int number) => new(Recording(number), new ActivityValues());
 
     public static Day Day(LocalDate date) => new() { Person = "anna", Date = date, State = DayState.Unknown };
 

@@ -11,14 +11,20 @@ namespace LoadWatch.Activities;
 public static class ActivityComputation
 {
     /// <summary>Raised by one whenever a formula, a cut or a quantity changes: what an older program computed is then computed again.</summary>
-    public const int Version = 4;
+    public const int Version = 5;
 
     /// <summary>Anchors are taken as they hold on the recording's local date.</summary>
     /// <exception cref="ArgumentException">The recording carries no date.</exception>
-    public static ActivityValues Compute(Recording recording, Person person, AnchorBook anchors, ComputationSettings settings)
+    public static ActivityValues Compute(Recording recording, Person person, AnchorBook anchors, ComputationSettings settings) =>
+        Compute(new UsableRecording(recording, settings.UsableShareWanted), person, anchors, settings);
+
+    /// <param name="cut">The recording after the quality cuts.</param>
+    /// <inheritdoc cref="Compute(Recording, Person, AnchorBook, ComputationSettings)"/>
+    public static ActivityValues Compute(UsableRecording cut, Person person, AnchorBook anchors, ComputationSettings settings)
     {
-        var date = LocalStart.Of(recording, person).Date;
-        var usable = new UsableRecording(person.HeartRateIsValidOn(date) ? recording : WithoutHeartRate(recording), settings.UsableShareWanted);
+        ArgumentNullException.ThrowIfNull(cut);
+        var date = LocalStart.Of(cut.Recording, person).Date;
+        var usable = person.HeartRateIsValidOn(date) ? cut : new UsableRecording(WithoutHeartRate(cut.Recording), settings.UsableShareWanted);
         var loads = ActivityLoads.Of(usable, date, person, anchors, settings);
         var stimulus = SessionStimulus.Of(usable, date, person, anchors, settings);
         return new ActivityValues
@@ -38,7 +44,12 @@ public static class ActivityComputation
 
     /// <summary>Where heart rate says nothing about the person's effort, it is as if it had not been recorded.</summary>
     private static Recording WithoutHeartRate(Recording recording) =>
-        recording with { Samples = recording.Samples.Without(Channel.HeartRate), LateHeartRates = [] };
+        recording with
+        {
+            Samples = recording.Samples.Without(Channel.HeartRate),
+            Gathered = recording.Gathered.Where(one => one.Key != Channel.HeartRate).ToDictionary(),
+            LateHeartRates = [],
+        };
 
     /// <summary>Weighted by time; the plain mean where the readings stand for no time.</summary>
     private static double? Mean(UsableChannel? channel)

@@ -35,7 +35,7 @@ public static class ChannelHistogram
         for (var at = 0; at < values.Length && at < milliseconds.Length; at++)
         {
             var bin = BinOf(values[at], perUnit);
-            if ((uint)bin < (uint)usual.Length)
+            if (bin >= 0 && bin < usual.Length)
             {
                 usual[bin] += milliseconds[at];
             }

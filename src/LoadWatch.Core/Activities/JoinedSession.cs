@@ -27,7 +27,7 @@ internal static class JoinedSession
             Date = date,
             Start = recording?.Winner.Start ?? (session.Start is { } start ? (date + start).InZoneLeniently(person.Zone).ToInstant() : null),
             Sport = sport,
-            Sources = Sorted([.. recording is null ? Array.Empty<string>() : [recording.Winner.Source], .. stated.Select(one => one.Source)]),
+            Sources = Sorted([.. recording?.Sources ?? [], .. stated.Select(one => one.Source)]),
             Quantities = quantities.Quantities,
             Stimulus = regions,
             UsableShare = recording?.Values.UsableShare ?? new Dictionary<Channel, double>(),

@@ -34,18 +34,17 @@ public static class RecordingCut
 
     private static IEnumerable<Instant> Moments(Recording recording) =>
     [
-        .. Extremes(recording.Samples),
+        .. new[] { recording.First, recording.Last }.OfType<Instant>(),
         .. recording.LateHeartRates.Select(beat => Instant.FromUnixTimeMilliseconds(beat.UnixMilliseconds)),
         .. recording.Sets.Select(set => set.Start).OfType<Instant>(),
     ];
-
-    private static IEnumerable<Instant> Extremes(SampleSeries samples) => new[] { samples.First, samples.Last }.OfType<Instant>();
 
     private static Recording Within(Recording recording, Instant from, Instant to)
     {
         var kept = recording with
         {
             Samples = Rows(recording.Samples, from.ToUnixTimeMilliseconds(), to.ToUnixTimeMilliseconds()),
+            Gathered = recording.Gathered.ToDictionary(one => one.Key, one => Rows(one.Value, from.ToUnixTimeMilliseconds(), to.ToUnixTimeMilliseconds())),
             LateHeartRates = [.. recording.LateHeartRates.Where(beat => IsIn(Instant.FromUnixTimeMilliseconds(beat.UnixMilliseconds)))],
             Sets = [.. recording.Sets.Where(set => set.Start is not { } start || IsIn(start))],
             Pauses = [.. recording.Pauses.Where(pause => pause.Start <= to && !(pause.End < from)).Select(pause => Clipped(pause, from, to))],

@@ -9,8 +9,9 @@ public static class RecordingSummaries
     /// <param name="sha">SHA-256 of the arrival, 64 lower-case hex digits.</param>
     /// <param name="sourceName">The layout of a CSV; null for FIT.</param>
     /// <exception cref="ArgumentException">The recording carries no date.</exception>
-    public static RecordingSummary Of(string sha, Recording recording, Person person, string? sourceName)
+    public static RecordingSummary Of(string sha, UsableRecording usable, Person person, string? sourceName)
     {
+        var recording = usable.Recording;
         var start = LocalStart.Of(recording, person);
         return new RecordingSummary(
             sha,
@@ -22,10 +23,13 @@ public static class RecordingSummaries
             recording.ElapsedSeconds,
             recording.TimerSeconds,
             Source(recording.Device, sourceName),
-            UsableSamples.ChannelsOf(recording).Count(),
+            ChannelExtents.Of(usable),
             recording.Samples.Count,
             recording.Sets.Count,
-            SamplesDigest.Of(recording));
+            SamplesDigest.Of(recording))
+        {
+            DistanceMetres = recording.DistanceMetres,
+        };
     }
 
     private static string Source(Device device, string? sourceName)

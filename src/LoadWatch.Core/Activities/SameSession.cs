@@ -1,61 +1,47 @@
-using NodaTime;
-
 namespace LoadWatch.Activities;
 
-/// <summary>One activity: the recording that counts, and those of the same session that do not.</summary>
-/// <param name="Superseded">Richest first.</param>
-public sealed record SessionGroup(RecordingSummary Winner, IReadOnlyList<RecordingSummary> Superseded);
+/// <summary>The recordings of one activity: the one that it is named by, and the others of the same session.</summary>
+/// <param name="Others">Richest first.</param>
+public sealed record SessionGroup(RecordingSummary Winner, IReadOnlyList<RecordingSummary> Others)
+{
+    /// <summary>The winner first, then the others.</summary>
+    public IEnumerable<RecordingSummary> Recordings => [Winner, .. Others];
+}
 
 /// <summary>
-/// The same session recorded by two devices or exported twice counts once (I-9): recordings that start within 2 s of the richest are one
-/// activity.
-/// Recordings of one file compete only if start and samples are equal. The order of richness is total, so the order of arrival never
-/// matters (I-5).
+/// The same session recorded by two devices or exported twice counts once (I-9). The richest recording wins and takes all that are of its session
+/// (<see cref="SessionOverlap.IsOneSession"/>); of what is left the richest wins likewise, and so on. The order of richness is total, so the order of
+/// arrival never matters (I-5).
 /// </summary>
 public static class SameSession
 {
-    /// <summary>How far apart two starts of one session may lie. A choice: two devices started by one hand.</summary>
-    public static Duration StartTolerance { get; } = Duration.FromSeconds(2);
-
-    /// <summary>Every recording is in exactly one group. Groups by start, then by key of the winner.</summary>
-    public static IReadOnlyList<SessionGroup> Choose(IReadOnlyList<RecordingSummary> ofOnePerson)
+    /// <summary>Every recording is in exactly one group; groups richest winner first.</summary>
+    /// <param name="replaced">Arrivals whose every name holds other contents now, with those: a correction counts before what it corrects, however
+    /// rich that is; what nothing else overlaps stays, since an exporter may write all of its files under one name.</param>
+    public static IReadOnlyList<SessionGroup> Choose(
+        IReadOnlyCollection<RecordingSummary> ofOnePerson, IReadOnlyDictionary<string, IReadOnlyList<string>> replaced)
     {
-        List<(RecordingSummary Winner, List<RecordingSummary> Superseded)> groups = [];
-        foreach (var recording in RichestFirst(ofOnePerson))
+        var left = RichestFirst(ofOnePerson, replaced).ToList();
+        var groups = new List<SessionGroup>();
+        while (left.Count > 0)
         {
-            var group = groups.FindIndex(one => Competes(one.Winner, recording));
-            if (group < 0)
-            {
-                groups.Add((recording, []));
-            }
-            else
-            {
-                groups[group].Superseded.Add(recording);
-            }
+            var winner = left[0];
+            var others = left.FindAll(other => other != winner && SessionOverlap.IsOneSession(winner, other));
+            groups.Add(new SessionGroup(winner, others));
+            left = left.FindAll(other => other != winner && !others.Contains(other));
         }
 
-        return [.. groups
-            .OrderBy(group => group.Winner.Start)
-            .ThenBy(group => group.Winner.Sha, StringComparer.Ordinal)
-            .ThenBy(group => group.Winner.Part)
-            .Select(group => new SessionGroup(group.Winner, group.Superseded))];
+        return groups;
     }
 
-    private static IEnumerable<RecordingSummary> RichestFirst(IEnumerable<RecordingSummary> recordings) => recordings
-        .OrderByDescending(recording => recording.Channels)
+    /// <summary>Current before replaced; then channels, usable channels, samples and sets; then the earlier start; then content and part.</summary>
+    public static IEnumerable<RecordingSummary> RichestFirst(
+        IEnumerable<RecordingSummary> recordings, IReadOnlyDictionary<string, IReadOnlyList<string>> replaced) => recordings
+        .OrderBy(recording => replaced.ContainsKey(recording.Sha))
+        .ThenByDescending(recording => recording.Channels.Count)
+        .ThenByDescending(recording => recording.Channels.UsableCount)
         .ThenByDescending(recording => (long)recording.Samples + recording.Sets)
         .ThenBy(recording => recording.Start)
         .ThenBy(recording => recording.Sha, StringComparer.Ordinal)
         .ThenBy(recording => recording.Part);
-
-    private static bool Competes(RecordingSummary winner, RecordingSummary other)
-    {
-        if (winner.Sha == other.Sha)
-        {
-            return winner.Start == other.Start && winner.SamplesDigest == other.SamplesDigest;
-        }
-
-        var apart = winner.Start - other.Start;
-        return apart <= StartTolerance && -apart <= StartTolerance;
-    }
 }

@@ -20,13 +20,18 @@ public static class UsableSamples
     /// <summary>The channels with a reading, heart rate also where beats came only in messages of their own.</summary>
     public static IEnumerable<Channel> ChannelsOf(Recording recording) =>
         SampleSeries.EveryChannel.Where(channel =>
-            recording.Samples.Has(channel) || (channel == Channel.HeartRate && recording.LateHeartRates.Count > 0));
+            recording.SeriesOf(channel).Has(channel) || (channel == Channel.HeartRate && recording.LateHeartRates.Count > 0));
 
     public static UsableChannel Of(Recording recording, Channel channel) => Of(recording, channel, SampleTimeline.Of(recording.Samples.Times));
 
     /// <summary>The same where the time line of the recording's samples is known.</summary>
     internal static UsableChannel Of(Recording recording, Channel channel, SampleTimeline timeline)
     {
+        if (recording.Gathered.TryGetValue(channel, out var gathered))
+        {
+            return Of(channel, recording.Sport, gathered, SampleTimeline.Of(gathered.Times));
+        }
+
         if (channel == Channel.HeartRate && recording.LateHeartRates.Count > 0)
         {
             var (times, values) = LateBeatRows.With(recording.Samples, recording.LateHeartRates);
@@ -34,10 +39,22 @@ public static class UsableSamples
             return Of(channel, recording.Sport, withBeats, withBeats.Ordered(values));
         }
 
-        return recording.Samples.Column(channel) is { } column
-            ? Of(channel, recording.Sport, timeline, timeline.Ordered(column))
-            : new UsableChannel(channel, [], [], [], 0, share: 0);
+        return Of(channel, recording.Sport, recording.Samples, timeline);
     }
+
+    /// <summary>The rows of what a file tells that count for a channel within a stretch, in time order; a row without a reading is NaN.</summary>
+    internal static IEnumerable<(long UnixMilliseconds, double Value)> Rows(Recording recording, Channel channel, Stretch within)
+    {
+        var (times, values) = channel == Channel.HeartRate && recording.LateHeartRates.Count > 0
+            ? LateBeatRows.With(recording.Samples, recording.LateHeartRates)
+            : (recording.Samples.Times, recording.Samples.Column(channel) ?? []);
+        var timeline = values.Length == 0 ? SampleTimeline.Of([]) : SampleTimeline.Of(times);
+        return timeline.Times.Zip(timeline.Ordered(values)).Where(row => within.Holds(row.First));
+    }
+
+    private static UsableChannel Of(Channel channel, Sport sport, SampleSeries samples, SampleTimeline timeline) => samples.Column(channel) is { } column
+        ? Of(channel, sport, timeline, timeline.Ordered(column))
+        : new UsableChannel(channel, [], [], [], 0, share: 0);
 
     private static UsableChannel Of(Channel channel, Sport sport, SampleTimeline timeline, double[] values)
     {

@@ -53,4 +53,10 @@ public enum NoticeReason
 
     /// <summary>The day has no brief with data that could have changed.</summary>
     NoBriefYet,
+
+    /// <summary>The daily report on the service itself is due.</summary>
+    ServiceReportDue,
+
+    /// <summary>The service itself is in trouble.</summary>
+    ServiceTrouble,
 }

@@ -30,6 +30,12 @@ public sealed record Recording
 
     public SampleSeries Samples { get; init; } = SampleSeries.Empty;
 
+    /// <summary>
+    /// Channels whose readings several recordings of the session gave, each as a series of that channel alone; they count instead of those of
+    /// <see cref="Samples"/>. Empty in what a file tells.
+    /// </summary>
+    public IReadOnlyDictionary<Channel, SampleSeries> Gathered { get; init; } = new Dictionary<Channel, SampleSeries>();
+
     /// <summary>Beats delivered in messages of their own (chest straps under water), in time order; not merged into the samples.</summary>
     public IReadOnlyList<TimedHeartRate> LateHeartRates { get; init; } = [];
 
@@ -44,6 +50,15 @@ public sealed record Recording
     public int Lengths { get; init; }
 
     public Device Device { get; init; } = Device.Unknown;
+
+    /// <summary>Earliest dated row of any series, or null.</summary>
+    public Instant? First => Gathered.Values.Append(Samples).Min(series => series.First);
+
+    /// <summary>Latest dated row of any series, or null.</summary>
+    public Instant? Last => Gathered.Values.Append(Samples).Max(series => series.Last);
+
+    /// <summary>The series that holds the readings of a channel.</summary>
+    public SampleSeries SeriesOf(Channel channel) => Gathered.GetValueOrDefault(channel, Samples);
 }
 
 /// <summary>A heart-rate reading with its own time.</summary>

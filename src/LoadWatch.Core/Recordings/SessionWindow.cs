@@ -33,7 +33,7 @@ public static class SessionWindow
 
     private static Interval? Extent(Recording recording) => recording switch
     {
-        { Samples: { First: { } first, Last: { } last } } => new Interval(first, last),
+        { First: { } first, Last: { } last } => new Interval(first, last),
         { Start: { } start, ElapsedSeconds: { } seconds } when double.IsFinite(seconds) && seconds >= 0 =>
             new Interval(start, start + Duration.FromSeconds(seconds)),
         _ => null,

@@ -62,7 +62,7 @@ public static class PowerStimulus
     private static Reading At(double watts, in PowerDrive drive, Recruitment recruitment, Span<Reading> kept)
     {
         var whole = unchecked((int)watts);
-        if ((uint)whole >= (uint)kept.Length || whole != watts || !drive.IsFresh(watts))
+        if (whole < 0 || whole >= kept.Length || whole != watts || !drive.IsFresh(watts))
         {
             return Reading.Of(drive.At(watts), recruitment);
         }

@@ -18,21 +18,23 @@ public static class InboxRemoval
     };
 
     /// <summary>Gives files back their names where an earlier run ended between rename and removal; the scan then finds them like any other.</summary>
-    public static void PutBack(WorkingConfiguration configuration)
+    public static void PutBack(Inbox inbox)
     {
-        foreach (var inbox in configuration.Inboxes.Where(inbox => inbox.Take == TakeMode.Move && Directory.Exists(inbox.Path)))
+        if (inbox.Take != TakeMode.Move)
         {
-            try
+            return;
+        }
+
+        try
+        {
+            foreach (var aside in Directory.EnumerateFiles(inbox.Path, Aside + "*", EverySubfolder).ToList())
             {
-                foreach (var aside in Directory.EnumerateFiles(inbox.Path, Aside + "*", EverySubfolder).ToList())
-                {
-                    DurableFile.RenameWithoutOverwrite(aside, Path.Combine(Path.GetDirectoryName(aside)!, Path.GetFileName(aside)[Aside.Length..]));
-                }
+                DurableFile.RenameWithoutOverwrite(aside, Path.Combine(Path.GetDirectoryName(aside)!, Path.GetFileName(aside)[Aside.Length..]));
             }
-            catch (Exception e) when (e is IOException or UnauthorizedAccessException)
-            {
-                // The share is read-only or away just now; the next sweep tries again.
-            }
+        }
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+        {
+            // The share is read-only or away just now; the next sweep tries again.
         }
     }
 

@@ -13,7 +13,7 @@ public static class InboxScan
 {
     private static readonly string[] Unfinished = [".tmp", ".part", ".partial", ".crdownload", ".download"];
 
-    private static readonly EnumerationOptions Options = new()
+    internal static readonly EnumerationOptions Options = new()
     {
         RecurseSubdirectories = true,
         MaxRecursionDepth = 16,
@@ -45,6 +45,13 @@ public static class InboxScan
         {
             return false;
         }
+    }
+
+    /// <summary>Whether any file is in it; false also when the folder itself cannot be listed.</summary>
+    public static bool HoldsFiles(Inbox inbox)
+    {
+        var holds = false;
+        return TryEach(inbox, (_, _) => holds = true) && holds;
     }
 
     /// <summary>False for hidden files, lock files of office programs and names of copies under way.</summary>

@@ -2,67 +2,98 @@ using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Files;
+using NodaTime;
 
 namespace LoadWatch.Service.Arrivals;
 
 /// <summary>Finds the files that a sweep has to look into: all that are new or whose stamp differs from the one they were taken with, and all that are still to go.</summary>
 public static class Inboxes
 {
-    /// <summary>Changed files in the order of the inboxes and, within each, of their paths.</summary>
-    public static IReadOnlyList<(FoundFile File, FileStamp Stamp)> Changed(WorkingConfiguration configuration, Store store, KnownFiles known, SweepReport report)
+    /// <summary>
+    /// Changed files in the order of the inboxes and, within each, of their paths. Inboxes that are not available are reported, and nothing of them is forgotten.
+    /// </summary>
+    public static IReadOnlyList<(FoundFile File, FileStamp Stamp)> Changed(
+        WorkingConfiguration configuration, Store store, InboxLooks looks, KnownFiles known, Instant now, SweepReport report)
     {
-        var changed = new List<(FoundFile File, FileStamp Stamp)>();
-        foreach (var inbox in configuration.Inboxes)
-        {
-            var ofInbox = new List<(FoundFile File, FileStamp Stamp)>();
-            if (!Look(inbox, known.Of(inbox.Name, store), ofInbox, report))
-            {
-                report.MissingInboxes.Add(inbox.Name);
-                continue;
-            }
-
-            changed.AddRange(ofInbox.OrderBy(found => found.File.Path, StringComparer.Ordinal));
-        }
-
-        return changed;
+        var found = looks.Run(configuration, store, known, report.Advanced);
+        report.Take(found);
+        Remember(store, found, now);
+        return [.. found.SelectMany(look => look.Changed)];
     }
 
-    private static bool Look(Inbox inbox, KnownInbox known, List<(FoundFile File, FileStamp Stamp)> changed, SweepReport report)
+    /// <summary>Lists one inbox. Runs on a thread of its own, since it may never return.</summary>
+    /// <param name="progress">Called for every file.</param>
+    /// <returns>Null when the folder cannot be listed.</returns>
+    public static InboxLook? Look(Inbox inbox, KnownInbox known, Action progress)
     {
         var seen = 0;
-        var isThere = InboxScan.TryEach(inbox, (path, fullPath) =>
+        var changed = new List<(FoundFile File, FileStamp Stamp)>();
+        var unreadable = new List<string>();
+        var isListed = InboxScan.TryEach(inbox, (path, fullPath) =>
         {
-            seen++;
+            progress();
+            if (path.SequenceEqual(inbox.Marker))
+            {
+                return;
+            }
 
-            // No stamp: gone again, or a pipe or link that intake never takes.
-            if (SafeFile.StampOf(fullPath) is { } stamp && (IsToGo(inbox) || !known.Has(path, stamp)))
+            seen++;
+            var stamp = SafeFile.StampOf(fullPath);
+            if (stamp is not null && (IsToGo(inbox) || !known.Has(path, stamp)))
             {
                 changed.Add((new FoundFile(inbox, path.ToString(), fullPath.ToString()), stamp));
             }
+
+            // No stamp: gone again, or a pipe or link that intake never takes, or a name whose bytes were lost on the way into a string.
+            if (stamp is null && UnreadableNames.IsOne(path))
+            {
+                unreadable.Add(path.ToString());
+            }
         });
-        report.Seen += isThere ? seen : 0;
-        return isThere;
+        return isListed
+            ? new InboxLook(inbox, null, null, seen, [.. changed.OrderBy(found => found.File.Path, StringComparer.Ordinal)], [.. unreadable.Order(StringComparer.Ordinal), .. UnreadableNames.OfFolders(inbox)])
+            : null;
+    }
+
+    /// <summary>Which folder each inbox is; written only where that changed.</summary>
+    private static void Remember(Store store, IReadOnlyList<InboxLook> looks, Instant now)
+    {
+        var changed = store.Read(session => looks.Where(look => look.Root is not null && session.InboxRoots.Of(look.Inbox.Name) != look.Root).ToList());
+        if (changed.Count > 0)
+        {
+            store.Write(session => changed.ForEach(look => Remember(session, look, now)));
+        }
+    }
+
+    private static void Remember(StoreSession session, InboxLook look, Instant now)
+    {
+        session.InboxRoots.Put(look.Inbox.Name, look.Root!);
+        if (look.IsReplaced)
+        {
+            session.Audits.Add("inbox_replaced", look.Inbox.Name, now);
+        }
     }
 
     /// <summary>Makes one sub-folder per person in every inbox that can be written, so that a new user sees where files go.</summary>
     /// <returns>The folders that were made.</returns>
-    public static IReadOnlyList<string> MakePersonFolders(WorkingConfiguration configuration)
+    public static IReadOnlyList<string> MakePersonFolders(WorkingConfiguration configuration) =>
+        [.. configuration.Inboxes.Where(inbox => Directory.Exists(inbox.Path)).SelectMany(inbox => MakePersonFolders(inbox, configuration))];
+
+    /// <inheritdoc cref="MakePersonFolders(WorkingConfiguration)"/>
+    public static IReadOnlyList<string> MakePersonFolders(Inbox inbox, WorkingConfiguration configuration)
     {
         var made = new List<string>();
-        foreach (var inbox in configuration.Inboxes.Where(inbox => Directory.Exists(inbox.Path)))
+        try
         {
-            try
+            foreach (var folder in Missing(inbox, configuration))
             {
-                foreach (var folder in Missing(inbox, configuration))
-                {
-                    made.Add(Directory.CreateDirectory(folder).FullName);
-                    LetInWhoMayDrop(inbox.Path, folder);
-                }
+                made.Add(Directory.CreateDirectory(folder).FullName);
+                LetInWhoMayDrop(inbox.Path, folder);
             }
-            catch (Exception e) when (e is IOException or UnauthorizedAccessException)
-            {
-                // A read-only share: its owner makes the folders.
-            }
+        }
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+        {
+            // A read-only share: its owner makes the folders.
         }
 
         return made;

@@ -1,4 +1,5 @@
 using System.Buffers.Binary;
+using System.Collections.Concurrent;
 using System.Runtime.InteropServices;
 using System.Security.Cryptography;
 using LoadWatch.Storage;
@@ -8,55 +9,85 @@ namespace LoadWatch.Service.Arrivals;
 
 /// <summary>
 /// Which files were taken as they stand now. A cache only: whatever it does not know is read and hashed again, which changes nothing (I-1). It keeps a
-/// fingerprint of each name and of its stamp, some 40 bytes a file, and is told of a file only when that is durable. Not for two threads at once.
+/// fingerprint of each name and of its stamp, some 40 bytes a file, and is told of a file only when that is durable. Safe to use from several threads.
 /// </summary>
 public sealed class KnownFiles
 {
-    private readonly Dictionary<string, Dictionary<UInt128, ulong>> inboxes = new(StringComparer.Ordinal);
+    private readonly ConcurrentDictionary<string, Lazy<KnownInbox>> inboxes = new(StringComparer.Ordinal);
 
     /// <summary>The files of an inbox; read from the store at the first call.</summary>
-    public KnownInbox Of(string inbox, Store store)
-    {
-        if (!inboxes.TryGetValue(inbox, out var files))
-        {
-            files = inboxes[inbox] = store.Read(session => Read(session, inbox));
-        }
+    public KnownInbox Of(string inbox, Store store) =>
+        inboxes.GetOrAdd(inbox, name => new Lazy<KnownInbox>(() => store.Read(session => Read(session, name)), LazyThreadSafetyMode.PublicationOnly)).Value;
 
-        return new KnownInbox(files);
-    }
-
-    public void Add(FoundFile file, FileStamp stamp)
-    {
-        if (inboxes.TryGetValue(file.Inbox.Name, out var files))
-        {
-            files[NameOf(file.Path)] = StampOf(stamp);
-        }
-    }
+    public void Add(FoundFile file, FileStamp stamp) => Read(file.Inbox.Name)?.Add(file.Path, stamp);
 
     /// <summary>The store no longer says that this name was seen.</summary>
-    public void Forget(string inbox, string path)
+    public void Forget(string inbox, string path) => Read(inbox)?.Forget(path);
+
+    /// <summary>Null where it was not asked for yet: it will be read with all that is durable by then.</summary>
+    private KnownInbox? Read(string inbox) => inboxes.TryGetValue(inbox, out var files) && files.IsValueCreated ? files.Value : null;
+
+    private static KnownInbox Read(StoreSession session, string inbox)
     {
-        if (inboxes.TryGetValue(inbox, out var files))
+        var files = new KnownInbox(session.Sightings.CountLatest(inbox));
+        session.Sightings.EachLatest(inbox, (path, stamp) => files.Add(path, stamp));
+        return files;
+    }
+}
+
+/// <summary>The known files of one inbox. Safe to use from several threads.</summary>
+public sealed class KnownInbox(int expected = 0)
+{
+    private readonly Lock guard = new();
+    private readonly Dictionary<UInt128, ulong> files = new(expected);
+
+    public int Count
+    {
+        get
         {
-            files.Remove(NameOf(path));
+            lock (guard)
+            {
+                return files.Count;
+            }
         }
     }
 
-    private static Dictionary<UInt128, ulong> Read(StoreSession session, string inbox)
+    /// <param name="path">Below the inbox, <c>/</c> between folders.</param>
+    public bool Has(ReadOnlySpan<char> path, FileStamp stamp)
     {
-        var files = new Dictionary<UInt128, ulong>(session.Sightings.CountLatest(inbox));
-        session.Sightings.EachLatest(inbox, (path, stamp) => files[NameOf(path)] = StampOf(stamp));
-        return files;
+        var (name, wanted) = (NameOf(path), StampOf(stamp));
+        lock (guard)
+        {
+            return files.TryGetValue(name, out var known) && known == wanted;
+        }
     }
 
-    internal static UInt128 NameOf(ReadOnlySpan<char> path)
+    internal void Add(ReadOnlySpan<char> path, FileStamp stamp)
+    {
+        var (name, known) = (NameOf(path), StampOf(stamp));
+        lock (guard)
+        {
+            files[name] = known;
+        }
+    }
+
+    internal void Forget(ReadOnlySpan<char> path)
+    {
+        var name = NameOf(path);
+        lock (guard)
+        {
+            files.Remove(name);
+        }
+    }
+
+    private static UInt128 NameOf(ReadOnlySpan<char> path)
     {
         Span<byte> hash = stackalloc byte[SHA256.HashSizeInBytes];
         SHA256.HashData(MemoryMarshal.AsBytes(path), hash);
         return BinaryPrimitives.ReadUInt128LittleEndian(hash);
     }
 
-    internal static ulong StampOf(FileStamp stamp)
+    private static ulong StampOf(FileStamp stamp)
     {
         Span<byte> hash = stackalloc byte[SHA256.HashSizeInBytes];
         Span<byte> bytes = stackalloc byte[2 * sizeof(long) + 256];
@@ -66,15 +97,4 @@ public sealed class KnownFiles
         SHA256.HashData(bytes[..length], hash);
         return BinaryPrimitives.ReadUInt64LittleEndian(hash);
     }
-}
-
-/// <summary>The known files of one inbox.</summary>
-public readonly struct KnownInbox
-{
-    private readonly Dictionary<UInt128, ulong> files;
-
-    internal KnownInbox(Dictionary<UInt128, ulong> files) => this.files = files;
-
-    /// <param name="path">Below the inbox, <c>/</c> between folders.</param>
-    public bool Has(ReadOnlySpan<char> path, FileStamp stamp) => files.TryGetValue(KnownFiles.NameOf(path), out var known) && known == KnownFiles.StampOf(stamp);
 }

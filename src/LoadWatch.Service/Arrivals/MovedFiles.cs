@@ -11,7 +11,8 @@ namespace LoadWatch.Service.Arrivals;
 /// Takes up held contents that somebody has put right by moving the file: a name that is gone from an inbox that keeps its files says nothing any more,
 /// as long as another name of the same content is still there.
 /// </summary>
-public sealed class MovedFiles(WorkingConfiguration configuration, Store store, ArchiveReader reader, Settlement settlement, KnownFiles known, Instant now)
+public sealed class MovedFiles(
+    WorkingConfiguration configuration, Store store, ArchiveReader reader, Settlement settlement, KnownFiles known, Instant now, SweepReport report)
 {
     public void TakeUp()
     {
@@ -40,6 +41,7 @@ public sealed class MovedFiles(WorkingConfiguration configuration, Store store, 
     /// <summary>Also true where it cannot be told: the inbox empties itself, is away, or is no longer configured.</summary>
     private bool IsThere(Sighting sighting) =>
         configuration.Inboxes.FirstOrDefault(inbox => inbox.Name == sighting.Inbox) is not { Take: TakeMode.Leave } inbox
+        || report.MissingInboxes.Contains(inbox.Name)
         || !Directory.Exists(inbox.Path)
         || File.Exists(Path.Combine(inbox.Path, sighting.Path.Split(Attribution.Inside)[0]));
 }

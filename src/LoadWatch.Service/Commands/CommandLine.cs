@@ -39,7 +39,7 @@ public static class CommandLine
         }
         catch (Exception e) when (Expected(e) is { } code)
         {
-            await Console.Error.WriteLineAsync(e.Message);
+            await Console.Error.WriteLineAsync(Told(e));
             return code;
         }
         catch (Exception e)
@@ -69,8 +69,16 @@ public static class CommandLine
         InspectCommand.Create(),
         ExportCommand.Create(),
         RebuildCommand.Create(),
+        VerifyCommand.Create(),
         StatusCommand.Create(),
         MailTestCommand.Create(),
+    };
+
+    private static string Told(Exception e) => e switch
+    {
+        DbException database when StoreTroubles.Of(database) == StoreTrouble.Damaged => $"{database.Message}: {StoreTroubles.AdviceOfDamage}.",
+        DbException database when StoreTroubles.Of(database) == StoreTrouble.Busy => "Another program holds the database: try again in a moment.",
+        _ => e.Message,
     };
 
     private static int? Expected(Exception e) => e switch

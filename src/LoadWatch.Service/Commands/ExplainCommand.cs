@@ -29,7 +29,7 @@ public static class ExplainCommand
     {
         var text = AlertExplanation.Of(session, subject)
             ?? DayExplanation.Of(configuration, session, subject, date)
-            ?? FileExplanation.Of(configuration, session, subject);
+            ?? FileExplanation.Of(session, subject);
         if (text is null)
         {
             Console.Error.WriteLine($"\"{subject}\" is no alert, person or file known here{Nearest.Hint(subject, configuration.People.Keys)}");

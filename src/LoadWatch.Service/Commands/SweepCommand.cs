@@ -28,8 +28,18 @@ public static class SweepCommand
             workplace.Adopt(workplace.Configuration with { Mail = null });
         }
 
+        var state = new ServiceRecord(started: null);
+        state.Began(MachineClock.Now());
         var report = workplace.NewSweep(now).Run(cancel);
-        new StatusFile(workplace).Write(MachineClock.Now(), report, configurationFault: null);
+        state.Ended(MachineClock.Now(), report, fault: null);
+        var status = new Statuses(workplace, state).Write(MachineClock.Now());
+        if (!isRehearsal)
+        {
+            // Somebody is here who reads the clock: what it says from now on counts.
+            new ClockGuard(workplace.Store).Note(now);
+            workplace.Store.Write(session => new ServiceNotices(workplace.Configuration, now).Decide(session, status));
+        }
+
         Print(report);
         return ExitCode.Ok;
     }
@@ -37,7 +47,7 @@ public static class SweepCommand
     public static void Print(SweepReport report)
     {
         Console.Out.WriteLine(Counts(report));
-        foreach (var line in report.MissingInboxes.Select(name => $"The inbox \"{name}\" cannot be listed.")
+        foreach (var line in report.Looks.Where(look => look.Away is not null).Select(look => $"The inbox \"{look.Inbox.Name}\" is not available: {look.Away}.")
             .Concat(report.Unreadable.Select(line => $"Left alone: {line.Subject}: {line.Sentence}"))
             .Concat(report.Undelivered.Select(line => $"Not delivered yet: {line}"))
             .Concat(report.GivenUp.Select(line => $"Not delivered, given up: {line}")))

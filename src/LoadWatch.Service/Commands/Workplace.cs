@@ -2,6 +2,8 @@ using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
+using LoadWatch.Storage.Dialects;
+using LoadWatch.Storage.Files;
 using NodaTime;
 
 namespace LoadWatch.Service.Commands;
@@ -30,11 +32,14 @@ public sealed class Workplace : IDisposable
 
     public Store Store { get; }
 
+    public InboxLooks Looks { get; } = new();
+
     /// <exception cref="ConfigurationException">The configuration is wrong.</exception>
     /// <exception cref="InstanceRunningException">Another process takes in files of the same data folder.</exception>
     public static Workplace OpenToWork(string configPath)
     {
         var configuration = ConfigurationReader.Read(configPath);
+        RemoteData.Refuse(configuration, FileSystems.NetworkOf);
         var folder = DataFolder.Open(configuration.DataFolder);
         var taken = InstanceLock.Take(folder);
         try
@@ -52,8 +57,19 @@ public sealed class Workplace : IDisposable
     public static Workplace OpenToRead(string configPath)
     {
         var configuration = ConfigurationReader.Read(configPath);
+        RemoteData.Refuse(configuration, FileSystems.NetworkOf);
         var folder = DataFolder.Open(configuration.DataFolder);
         return new Workplace(configPath, configuration, folder, null, Store.Open(folder));
+    }
+
+    /// <summary>To look only, beside a running service: creates and upgrades nothing.</summary>
+    /// <exception cref="ConfigurationException">The configuration is wrong.</exception>
+    /// <exception cref="DatabaseRefusedException">There is no database of this version yet.</exception>
+    public static Workplace OpenToLook(string configPath)
+    {
+        var configuration = ConfigurationReader.Read(configPath);
+        var folder = DataFolder.At(configuration.DataFolder);
+        return new Workplace(configPath, configuration, folder, null, Store.OpenToRead(folder));
     }
 
     /// <summary>
@@ -69,10 +85,17 @@ public sealed class Workplace : IDisposable
     /// <summary>The next sweep. After one that did not get as far as the pages, also in an earlier process, it writes them all anew.</summary>
     public Sweep NewSweep(Instant now)
     {
-        var sweep = new Sweep(Configuration, Folder, Store, now, new ChildProcessProbe(configPath), known) { PagesAreCurrent = last is { PagesAreWritten: true } };
+        var sweep = new Sweep(Configuration, Folder, Store, now, new ChildProcessProbe(configPath), known)
+        {
+            PagesAreCurrent = last is { PagesAreWritten: true },
+            Looks = Looks,
+        };
         last = sweep;
         return sweep;
     }
+
+    /// <summary>A sweep whose rows go into another store, over the same archive.</summary>
+    public Sweep NewSweepOn(Store store, Instant now) => new(Configuration, Folder, store, now, new ChildProcessProbe(configPath));
 
     public void Dispose()
     {

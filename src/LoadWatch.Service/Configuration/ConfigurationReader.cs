@@ -58,6 +58,7 @@ public sealed class ConfigurationReader
         var anchors = faults.Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList()));
         var devices = faults.Collect(() => roster is null || !HasDevices(file) ? DeviceBook.Empty : DevicesReader.Read(Resolve(file.Devices), file.Devices, people));
         var contacts = ContactsReader.Read(file, groups, roster is null ? null : people, zone, faults);
+        var administrators = AdministratorsReader.Read(file, zone, faults);
         var mail = new MailReader(Resolve, faults.Add).Read(file);
         faults.Stop();
 
@@ -80,6 +81,8 @@ public sealed class ConfigurationReader
             Duration.FromSeconds(file.Intake.SettleSeconds),
             file.Intake.LargestFileMegabytes * 1024L * 1024L)
         {
+            AllowNetworkDataFolder = file.AllowNetworkDataFolder,
+            Administrators = administrators,
             Mail = mail,
             Devices = devices!,
             Subjects = new Subjects(people, groups, devices!),

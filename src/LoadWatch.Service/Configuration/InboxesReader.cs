@@ -8,7 +8,11 @@ internal static class InboxesReader
     /// <param name="resolve">From a path of the file to a full one.</param>
     public static List<Inbox> Read(LoadWatchFile file, Func<string, string> resolve, FaultList faults)
     {
-        var inboxes = file.Inboxes.Select(entry => new Inbox(entry.Name, resolve(entry.Path), entry.Take) { FilePattern = FilePattern.Parse(entry.FilePattern) }).ToList();
+        var inboxes = file.Inboxes.Select(entry => new Inbox(entry.Name, resolve(entry.Path), entry.Take) 
+        {
+            FilePattern = FilePattern.Parse(entry.FilePattern),
+            Marker = entry.Marker.Length > 0 ? entry.Marker : null,
+        }).ToList();
         foreach (var (entry, i) in inboxes.Select((entry, i) => (entry, i)))
         {
             if (inboxes.Take(i).Any(above => above.Name == entry.Name))
@@ -19,6 +23,11 @@ internal static class InboxesReader
             if (entry.FilePattern is null && file.Inboxes[i].FilePattern is { Length: > 0 } pattern)
             {
                 faults.Add($"$.inboxes[{i}].file_pattern", $"\"{pattern}\" must hold {{person}} once and no folder");
+            }
+
+            if (entry.Marker is { } marker && (marker is "." or ".." || marker.AsSpan().ContainsAny('/', '\\')))
+            {
+                faults.Add($"$.inboxes[{i}].marker", $"\"{marker}\" must be the name of one file or folder in the inbox");
             }
 
             // What the service writes would come in again as new files.

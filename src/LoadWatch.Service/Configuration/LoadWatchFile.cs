@@ -17,6 +17,9 @@ public sealed record LoadWatchFile
     /// <summary>Folder of the archive and the database.</summary>
     public string Data { get; init; } = "data";
 
+    /// <summary>Whether the folder may lie on a network file system: only where no other machine ever opens it.</summary>
+    public bool AllowNetworkDataFolder { get; init; }
+
     /// <summary>Folder of the pages, one file per contact.</summary>
     public string Pages { get; init; } = "pages";
 
@@ -45,6 +48,9 @@ public sealed record LoadWatchFile
 
     /// <summary>Who is told.</summary>
     public IReadOnlyList<ContactEntry> Contacts { get; init; } = [new ContactEntry()];
+
+    /// <summary>Who looks after the service: told once a day how it is, and at once when it is in trouble. Nothing about people.</summary>
+    public IReadOnlyList<AdministratorEntry> Administrators { get; init; } = [];
 
     /// <summary>The server that takes mail.</summary>
     public MailEntry Mail { get; init; } = new();
@@ -78,6 +84,9 @@ public sealed record InboxEntry
 
     /// <summary>How file names tell whose a file is, where no folder does: {person} once, and * for any text, ? for one character; blank: not at all.</summary>
     public string FilePattern { get; init; } = "";
+
+    /// <summary>A file or folder that lies in the inbox whenever it is there, such as a hidden one on a share; blank: none.</summary>
+    public string Marker { get; init; } = "";
 }
 
 public enum TakeMode
@@ -152,6 +161,25 @@ public sealed record ContactEntry
 
     /// <summary>How mail names the people: <c>full</c>, <c>initials</c>, or <c>none</c> (counts only). Page and notice file name them in full.</summary>
     public NamesShown Names { get; init; } = NamesShown.Full;
+}
+
+/// <summary>Somebody who looks after the service.</summary>
+public sealed record AdministratorEntry
+{
+    /// <summary>Short name.</summary>
+    [Required(AllowEmptyStrings = false)]
+    [RegularExpression("^[A-Za-z0-9_-]{1,40}$", ErrorMessage = "may hold letters, digits, - and _ only, 40 at most")]
+    public string Id { get; init; } = "administrator";
+
+    /// <summary>Address for mail; blank: the notice file only.</summary>
+    public string Mail { get; init; } = "";
+
+    /// <summary>Local time of the daily report, 00:00 to 23:59.</summary>
+    [RegularExpression("^([01][0-9]|2[0-3]):[0-5][0-9]$", ErrorMessage = "is a time of day such as 07:00")]
+    public string ReportAt { get; init; } = "07:00";
+
+    /// <summary>IANA zone; blank takes the common one.</summary>
+    public string TimeZone { get; init; } = "";
 }
 
 /// <summary>What may be set of the computation.</summary>

@@ -34,6 +34,12 @@ public sealed record WorkingConfiguration(
     /// <summary>The mail server; null when there is none.</summary>
     public MailSettings? Mail { get; init; }
 
+    /// <summary>Whether the data folder may lie on a network file system.</summary>
+    public bool AllowNetworkDataFolder { get; init; }
+
+    /// <summary>Who looks after the service.</summary>
+    public IReadOnlyList<Administrator> Administrators { get; init; } = [];
+
     /// <summary>Devices that are handed out; empty without <c>devices.csv</c>.</summary>
     public DeviceBook Devices { get; init; } = DeviceBook.Empty;
 
@@ -55,4 +61,7 @@ public sealed record Inbox(string Name, string Path, TakeMode Take)
 {
     /// <summary>How file names tell whose a file is; null: they do not.</summary>
     public FilePattern? FilePattern { get; init; }
+
+    /// <summary>Name of what must lie in it for it to be the inbox; null: nothing.</summary>
+    public string? Marker { get; init; }
 }

@@ -40,7 +40,7 @@ public static class DayExplanation
         var recorded = session.Activities.OfPerson(known.Id, day.Date, day.Date).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
         foreach (var activity in PersonTraining.Of(session, configuration, TableBasis.Of(configuration, session), known).Activities.Where(activity => activity.Date == day.Date))
         {
-            AppendActivity(text, activity, recorded.GetValueOrDefault(activity.Key));
+            AppendActivity(text, session, activity, recorded.GetValueOrDefault(activity.Key));
         }
 
         foreach (var finding in session.Findings.OfPerson(known.Id, day.Date, day.Date))
@@ -96,10 +96,10 @@ public static class DayExplanation
         }
     }
 
-    private static void AppendActivity(StringBuilder text, JoinedActivity activity, StoredActivity? recorded)
+    private static void AppendActivity(StringBuilder text, StoreSession session, JoinedActivity activity, StoredActivity? recorded)
     {
         text.AppendLine();
-        var start = recorded is { Winner: { } winner } ? Words.Start(winner.Start.WithOffset(winner.LocalOffset)) : "of no recording";
+        var start = recorded is { Session: { } told } ? Words.Start(told.Start.WithOffset(told.LocalOffset)) : "of no recording";
         text.AppendLine(CultureInfo.InvariantCulture, $"session {start} {OneLine.Of(activity.Sport.ToString())}, by {OneLine.Of(string.Join(" and ", activity.Sources))}{(activity.AddsLoad ? "" : ", its load not added")}");
         foreach (var quantity in activity.Quantities)
         {
@@ -120,9 +120,10 @@ public static class DayExplanation
             text.AppendLine(CultureInfo.InvariantCulture, $"    {OneLine.Of(remark)}");
         }
 
-        if (recorded is not null)
+        foreach (var contribution in recorded?.Merge.Contributions ?? [])
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    recordings: {string.Join(", ", recorded.RecordingKeys.Select(key => key[..12] + key[64..]))}");
+            var (sha, part) = RecordingKey.Parse(contribution.Key);
+            text.AppendLine(CultureInfo.InvariantCulture, $"    recording {part} of {ContributionText.FileOf(session, sha)}: {ContributionText.Of(session, recorded!.Merge, contribution)}");
         }
     }
 

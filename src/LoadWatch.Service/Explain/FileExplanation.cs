@@ -1,8 +1,8 @@
 using System.Globalization;
 using System.Text;
+using LoadWatch.Activities;
 using LoadWatch.Notices;
 using LoadWatch.Service.Arrivals;
-using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Recordings;
@@ -13,20 +13,20 @@ namespace LoadWatch.Service.Explain;
 public static class FileExplanation
 {
     /// <summary>Null where no arrival has that path or hash.</summary>
-    public static string? Of(WorkingConfiguration configuration, StoreSession session, string word)
+    public static string? Of(StoreSession session, string word)
     {
         var found = MeantArrivals.Of(session, word);
-        return found.Count == 0 ? null : string.Join(Environment.NewLine, found.Select(arrival => Write(configuration, session, arrival)));
+        return found.Count == 0 ? null : string.Join(Environment.NewLine, found.Select(arrival => Write(session, arrival)));
     }
 
-    private static string Write(WorkingConfiguration configuration, StoreSession session, Arrival arrival)
+    private static string Write(StoreSession session, Arrival arrival)
     {
         var text = new StringBuilder();
         text.AppendLine(CultureInfo.InvariantCulture, $"{arrival.Sha}  {arrival.Kind ?? "not decoded yet"}, {arrival.Size} bytes");
         text.AppendLine(CultureInfo.InvariantCulture, $"    {Words.Of(arrival.State)}{(arrival.Reason is { } reason ? $": {OneLine.Of(reason)}" : "")}");
         foreach (var sighting in session.Sightings.Of(arrival.Sha))
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    seen as {OneLine.Of(sighting.Path)} in {OneLine.Of(sighting.Inbox)}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    seen as {OneLine.Of(sighting.Path)} in {OneLine.Of(sighting.Inbox)}{(sighting.Latest ? "" : ", where other bytes are by now")}");
         }
 
         if (arrival.ParentSha is { } parent)
@@ -40,15 +40,24 @@ public static class FileExplanation
             text.AppendLine(CultureInfo.InvariantCulture, $"    {DecisionText.Sentence(decision, decisions)}");
         }
 
-        foreach (var activity in configuration.People.Keys.SelectMany(id => session.Activities.OfPerson(id)))
+        foreach (var recording in session.Recordings.OfArrival(arrival.Sha))
         {
-            foreach (var key in activity.RecordingKeys.Where(key => key.StartsWith(arrival.Sha, StringComparison.Ordinal)))
-            {
-                var role = key == activity.Winner.Key ? "is" : "is superseded in";
-                text.AppendLine(CultureInfo.InvariantCulture, $"    part {key[65..]} {role} the session {Words.Start(activity.Winner.Start.WithOffset(activity.Winner.LocalOffset))} of {activity.Winner.Person}");
-            }
+            AppendRecording(text, session, recording);
         }
 
         return text.ToString();
+    }
+
+    /// <summary>Every recording is in one activity; its winner starts while the recording ran, or up to the longest recording before.</summary>
+    private static void AppendRecording(StringBuilder text, StoreSession session, RecordingSummary recording)
+    {
+        var from = recording.Start - RecordingSummary.Longest - SessionOverlap.StartTolerance;
+        foreach (var merge in session.Activities.Merges(recording.Person, from, recording.End + SessionOverlap.StartTolerance))
+        {
+            foreach (var contribution in merge.Contributions.Where(one => one.Key == recording.Key))
+            {
+                text.AppendLine(CultureInfo.InvariantCulture, $"    part {recording.Part} in the session {Words.Start(merge.Session.Start.WithOffset(merge.Session.LocalOffset))} of {recording.Person}: {ContributionText.Of(session, merge, contribution)}");
+            }
+        }
     }
 }

@@ -6,7 +6,7 @@ namespace LoadWatch.Service.Export;
 
 public sealed record ArrivalLine([property: JsonPropertyName("sha256")] string Sha256, string File, string? Kind, string State, string? Reason, string? Person);
 
-public sealed record RecordingLine([property: JsonPropertyName("sha256")] string Sha256, string File, int Part);
+public sealed record RecordingLine([property: JsonPropertyName("sha256")] string Sha256, string File, int Part, string Role, IReadOnlyList<string>? Gives);
 
 public sealed record QuantityLine(string Name, double Value, string Unit, bool Estimated);
 

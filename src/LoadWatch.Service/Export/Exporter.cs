@@ -75,10 +75,10 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
         return new ActivityLine(
             owner.Id,
             Words.Date(activity.Date),
-            activity.Start is { } start ? Words.Start(start.WithOffset(recorded?.Winner.LocalOffset ?? owner.Zone.GetUtcOffset(start))) : null,
+            activity.Start is { } start ? Words.Start(start.WithOffset(recorded?.Session.LocalOffset ?? owner.Zone.GetUtcOffset(start))) : null,
             activity.Sport.ToString(),
-            recorded?.Winner.ElapsedSeconds,
-            recorded?.Winner.TimerSeconds,
+            recorded?.Session.ElapsedSeconds,
+            recorded?.Session.TimerSeconds,
             activity.Quantities.Select(quantity => new QuantityLine(quantity.Name, quantity.Value, quantity.Unit, quantity.Estimated)).ToList(),
             configuration.Groups[owner.Group].LoadQuantity,
             TimesInZone(values.TimesInZone),
@@ -88,16 +88,21 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
             values.PowerMaxWatts,
             activity.UsableShare.OrderBy(pair => pair.Key).ToDictionary(pair => Words.Channel(pair.Key), pair => pair.Value, StringComparer.Ordinal),
             activity.Stimulus.Select(OfStimulus).ToList(),
-            recorded?.RecordingKeys.Select(OfRecording).ToList() ?? [],
+            recorded?.Merge.Contributions.OrderBy(one => one.Key, StringComparer.Ordinal).Select(OfRecording).ToList() ?? [],
             activity.Tables,
             activity.AddsLoad,
             activity.Remarks);
     }
 
-    private RecordingLine OfRecording(string key)
+    private RecordingLine OfRecording(Contribution contribution)
     {
-        var slash = key.IndexOf('/', StringComparison.Ordinal);
-        return new RecordingLine(key[..slash], FileOf(key[..slash]), int.Parse(key[(slash + 1)..], System.Globalization.CultureInfo.InvariantCulture));
+        var (sha, part) = RecordingKey.Parse(contribution.Key);
+        return new RecordingLine(
+            sha,
+            FileOf(sha),
+            part,
+            Words.Of(contribution.Role),
+            contribution.Gifts?.Select(gift => gift.Channel is { } channel ? Words.Channel(channel) : Words.Of(gift.Whole!.Value)).ToList());
     }
 
     private static TimeInZoneLine TimesInZone(IReadOnlyList<TimeInZone> times)

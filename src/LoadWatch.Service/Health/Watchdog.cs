@@ -6,10 +6,10 @@ using Microsoft.Extensions.Logging;
 namespace LoadWatch.Service.Health;
 
 /// <summary>
-/// Tells systemd that the service is alive, but only while its work gets on: a process whose sweep hangs goes silent and is started anew. A sweep that
-/// fails is work all the same; the status file and the log report it.
+/// Tells systemd that the service is alive, but only while every one of its loops gets on: a process whose sweep, status or watch hangs goes silent and is
+/// started anew. A sweep that fails is work all the same; the status file and the log report it.
 /// </summary>
-public sealed class Watchdog(ISystemdNotifier systemd, Heartbeat heartbeat, TimeProvider clock, ILogger<Watchdog> log) : BackgroundService
+public sealed class Watchdog(ISystemdNotifier systemd, IEnumerable<Heartbeat> loops, TimeProvider clock, ILogger<Watchdog> log) : BackgroundService
 {
     private static readonly ServiceState Alive = new("WATCHDOG=1");
 
@@ -33,7 +33,8 @@ public sealed class Watchdog(ISystemdNotifier systemd, Heartbeat heartbeat, Time
     /// <summary>Pings once, or says once that it does not.</summary>
     public void Ping()
     {
-        if (heartbeat.IsRecent)
+        var stuck = loops.FirstOrDefault(loop => !loop.IsRecent);
+        if (stuck is null)
         {
             silent = false;
             systemd.Notify(Alive);
@@ -41,7 +42,7 @@ public sealed class Watchdog(ISystemdNotifier systemd, Heartbeat heartbeat, Time
         else if (!silent)
         {
             silent = true;
-            LogMessages.WorkStalled(log, (int)heartbeat.StallAfter.TotalSeconds);
+            LogMessages.WorkStalled(log, stuck.Loop, (int)stuck.StallAfter.TotalSeconds);
         }
     }
 

@@ -28,12 +28,15 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         {
             return DecodeSound(content, claims, decided);
         }
-        catch (Exception e) when (e is ArithmeticException or ArgumentException or InvalidOperationException or IndexOutOfRangeException)
+        catch (Exception e) when (IsDefect(e))
         {
             var reason = $"a defect of LoadWatch, please report it: {e.GetType().Name} while it was computed";
             return new DecodedArrival(content.Sha, Words.Of(content.Kind), new ArrivalVerdict(ArrivalState.Refused, reason, null), []);
         }
     }
+
+    /// <summary>What only a fault of the program throws while it computes.</summary>
+    public static bool IsDefect(Exception e) => e is ArithmeticException or ArgumentException or InvalidOperationException or IndexOutOfRangeException;
 
     private DecodedArrival DecodeSound(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided)
     {
@@ -140,24 +143,39 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     public DecodedTable ReadTable(Arrival arrival) =>
         decoders.Decode(Read(arrival, "").Bytes).Table ?? throw new InvalidDataException($"{arrival.Sha[..12]} is no table");
 
-    /// <summary>Computes the values of one recording of a stored arrival again.</summary>
-    public ActivityValues Recompute(Arrival arrival, int part, string person)
+    /// <summary>The recordings of a stored arrival, read back from the archive; none where its original is missing or damaged.</summary>
+    public IReadOnlyList<Recording> ReadRecordings(Arrival arrival)
     {
-        var file = decoders.Decode(Read(arrival, "").Bytes);
-        var recording = file.Recordings.First(candidate => candidate.Part == part);
-        return Values(recording, configuration.People[person]);
+        try
+        {
+            return archive.Verify(arrival.ObjectSha) ? decoders.Decode(Read(arrival, "").Bytes).Recordings : [];
+        }
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException or InvalidDataException)
+        {
+            return [];
+        }
     }
 
-    private ComputedRecording Compute(string sha, Recording recording, Person person, string? sourceName) =>
-        new(RecordingSummaries.Of(sha, recording, person, sourceName), Values(recording, person));
+    /// <summary>Everything computed from a recording of a person of the roster: of the part within the planned session, where the plan has its time.</summary>
+    public ActivityValues Values(Recording recording, string person) =>
+        Values(new UsableRecording(recording, configuration.Computation.UsableShareWanted), configuration.People[person]);
 
-    /// <summary>Of the part of the recording that lies within the planned session, where the plan has its time.</summary>
-    private ActivityValues Values(Recording recording, Person person)
+    private ComputedRecording Compute(string sha, Recording recording, Person person, string? sourceName)
     {
+        var usable = new UsableRecording(recording, configuration.Computation.UsableShareWanted);
+        return new ComputedRecording(RecordingSummaries.Of(sha, usable, person, sourceName), recording, Values(usable, person));
+    }
+
+    private ActivityValues Values(UsableRecording usable, Person person)
+    {
+        var recording = usable.Recording;
         var planned = Basis.Planned(person, LocalStart.Of(recording, person).Date);
         var cut = SessionWindow.Of(recording, planned) is { } window ? RecordingCut.To(recording, window.Start, window.End) : new CutRecording(recording, []);
-        var values = ActivityComputation.Compute(cut.Recording, person, Basis.Anchors, configuration.Computation);
-        return cut.LeftOut.Count == 0 ? values : values with { Remarks = [.. cut.LeftOut, .. values.Remarks] };
+        return cut.LeftOut.Count == 0
+            ? ActivityComputation.Compute(usable, person, Basis.Anchors, configuration.Computation)
+            : Cut(ActivityComputation.Compute(cut.Recording, person, Basis.Anchors, configuration.Computation));
+
+        ActivityValues Cut(ActivityValues values) => values with { Remarks = [.. cut.LeftOut, .. values.Remarks] };
     }
 
     private static ArrivalVerdict ContainerVerdict(ArrivalContent content) => (content.Members, content.Problems.Count) switch

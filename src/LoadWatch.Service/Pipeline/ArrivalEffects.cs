@@ -1,22 +1,21 @@
 using LoadWatch.Activities;
-using LoadWatch.Recordings;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Activities;
+using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
 
-/// <summary>Applies settled arrivals within one transaction and then brings the activities of every person touched up to date (I-9).</summary>
-public sealed class ArrivalEffects(StoreSession session, ArrivalDecoder decoder)
+/// <summary>Applies settled arrivals within one transaction and then brings the activities around all that changed up to date (I-9).</summary>
+public sealed class ArrivalEffects(StoreSession session, RecordingShelf shelf, SessionValues values)
 {
-    private readonly Dictionary<string, ActivityValues> values = new(StringComparer.Ordinal);
-    private readonly SortedSet<string> touched = new(StringComparer.Ordinal);
+    private readonly Dictionary<string, List<RecordingSummary>> touched = new(StringComparer.Ordinal);
 
     public void Apply(DecodedArrival arrival)
     {
         foreach (var recording in session.Recordings.OfArrival(arrival.Sha))
         {
-            MarkDirty(recording);
-            touched.Add(recording.Person);
+            MarkWon(recording);
+            Touch(recording);
         }
 
         session.Recordings.RemoveArrival(arrival.Sha);
@@ -35,47 +34,82 @@ public sealed class ArrivalEffects(StoreSession session, ArrivalDecoder decoder)
         foreach (var recording in arrival.Recordings)
         {
             session.Recordings.Add(recording.Summary);
-            values[recording.Summary.Key] = recording.Values;
-            touched.Add(recording.Summary.Person);
+            Touch(recording.Summary);
+        }
+    }
+
+    /// <summary>A name that changed hands may make what it held before a correction's predecessor, or current again.</summary>
+    public void TouchNames(string sha)
+    {
+        if (session.Sightings.NameSakes(sha) is { Count: > 0 } others)
+        {
+            others.Append(sha).SelectMany(session.Recordings.OfArrival).ToList().ForEach(Touch);
         }
     }
 
     public void Finish()
     {
-        foreach (var person in touched)
+        foreach (var (person, recordings) in touched.OrderBy(pair => pair.Key, StringComparer.Ordinal))
         {
-            UpdateActivities(person);
+            var planning = new SessionPlanning(session, shelf, (from, to) => session.Recordings.Starting(person, from, to));
+            foreach (var group in planning.Around(recordings).Where(group => group.Count > 0))
+            {
+                Update(group, planning);
+            }
         }
     }
 
-    private void UpdateActivities(string person)
+    private void Touch(RecordingSummary recording)
     {
-        var sessions = SameSession.Choose(session.Recordings.OfPerson(person));
-        var winners = sessions.ToDictionary(group => group.Winner.Key, StringComparer.Ordinal);
-        var stored = session.Activities.OfPerson(person).ToDictionary(activity => activity.Winner.Key, StringComparer.Ordinal);
-        foreach (var lost in stored.Values.Where(activity => !winners.ContainsKey(activity.Winner.Key)))
+        if (!touched.TryGetValue(recording.Person, out var list))
+        {
+            touched[recording.Person] = list = [];
+        }
+
+        list.Add(recording);
+    }
+
+    /// <summary>The activities that a recording had won go with it.</summary>
+    private void MarkWon(RecordingSummary recording)
+    {
+        foreach (var won in session.Activities.Merges(recording.Person, recording.Start, recording.Start).Where(won => won.Winner.Key == recording.Key))
+        {
+            session.People.MarkDirty(recording.Person, won.Date);
+        }
+    }
+
+    private void Update(IReadOnlyList<RecordingSummary> group, SessionPlanning planning)
+    {
+        var stored = planning.Stored(group);
+        var plans = planning.Plan(group, plan => planning.ChangeOf(plan, stored) == SessionChange.Values && !values.IsKnown(plan));
+        var winners = plans.Select(plan => plan.Winner.Key).ToHashSet(StringComparer.Ordinal);
+        foreach (var lost in stored.Values.Where(one => !winners.Contains(one.Winner.Key)))
         {
             session.Activities.Remove(lost.Winner.Key);
-            MarkDirty(lost.Winner);
+            session.People.MarkDirty(lost.Winner.Person, lost.Date);
         }
 
-        foreach (var group in sessions)
+        foreach (var plan in plans)
         {
-            var keys = group.Superseded.Append(group.Winner).Select(recording => recording.Key).Order(StringComparer.Ordinal).ToList();
-            var isNew = values.ContainsKey(group.Winner.Key);
-            if (!isNew && stored.TryGetValue(group.Winner.Key, out var same) && same.RecordingKeys.SequenceEqual(keys, StringComparer.Ordinal))
-            {
-                continue;
-            }
-
-            session.Activities.Put(new StoredActivity(group.Winner, ValuesOf(group.Winner), keys));
-            MarkDirty(group.Winner);
+            Put(plan, planning.ChangeOf(plan, stored), stored.GetValueOrDefault(plan.Winner.Key));
         }
     }
 
-    /// <summary>Values computed in this group, else computed again from the archive: a recording that lost before has none stored.</summary>
-    private ActivityValues ValuesOf(RecordingSummary recording) =>
-        values.TryGetValue(recording.Key, out var fresh) ? fresh : decoder.Recompute(session.Arrivals.Get(recording.Sha)!, recording.Part, recording.Person);
+    private void Put(SessionPlan plan, SessionChange change, StoredMerge? before)
+    {
+        var merge = StoredMerge.Of(plan);
+        switch (change)
+        {
+            case SessionChange.None:
+                return;
+            case SessionChange.Recordings:
+                session.Activities.PutRecordings(merge);
+                break;
+            default:
+                session.Activities.Put(new StoredActivity(merge, values.Of(plan, session.Arrivals.Get)));
+                break;
+        }
 
-    private void MarkDirty(RecordingSummary recording) => session.People.MarkDirty(recording.Person, recording.Date);
+        session.People.MarkDirty(plan.Winner.Person, before is null ? merge.Date : LocalDate.Min(before.Date, merge.Date));
+    }
 }

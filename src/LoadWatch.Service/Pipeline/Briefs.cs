@@ -144,6 +144,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     [
         .. MissedNotices.Lines(session, contact, Ways(contact), now),
         .. inboxesAway.Select(inbox => new BriefLine(inbox, "this inbox cannot be looked into: nothing comes in from it until its folder is back")),
+        .. NothingArrived.Line(session, contact, now) is { } dry ? [dry] : Array.Empty<BriefLine>(),
         .. Files(session, contact),
         .. new OpenQuestions(configuration, now).Lines(session, contact, now.InZone(contact.Zone).Date),
         .. contact.People.Count > 0 || contact.Role == ContactRole.FrontDesk ? [] : new Answers(configuration, now).Questions(session),

@@ -16,4 +16,5 @@ public sealed record DecodedArrival(string Sha, string Kind, ArrivalVerdict Verd
     public IReadOnlyList<string> Questions { get; init; } = [];
 }
 
-public sealed record ComputedRecording(RecordingSummary Summary, ActivityValues Values);
+/// <param name="Values">Of the recording as an activity by itself.</param>
+public sealed record ComputedRecording(RecordingSummary Summary, Recording Recording, ActivityValues Values);

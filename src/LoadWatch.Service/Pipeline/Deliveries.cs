@@ -54,6 +54,7 @@ public sealed class Deliveries(Store store, IReadOnlyList<INoticeChannel> channe
         if (outcome.Result == ChannelResult.Delivered)
         {
             store.Write(session => session.Notices.MarkDelivered(key, way));
+            report.MailsDelivered += way.Channel == "mail" ? 1 : 0;
         }
         else if (Next(pending, outcome.Result, now) is { } next)
         {

@@ -12,7 +12,7 @@ public static class PersonTraining
     public static JoinResult Of(StoreSession session, WorkingConfiguration configuration, TableBasis basis, Person person)
     {
         var recorded = session.Activities.OfPerson(person.Id)
-            .Select(activity => new RecordedActivity(activity.Winner, activity.Winner.Start.WithOffset(activity.Winner.LocalOffset).LocalDateTime, activity.Values))
+            .Select(activity => new RecordedActivity(activity.Session, activity.Session.Start.WithOffset(activity.Session.LocalOffset).LocalDateTime, activity.Values) { Sources = [.. activity.Merge.Contributions.Select(one => one.Source)] })
             .ToList();
         var rows = session.TableRows.OfPerson(person.Id, RowKind.Sessions)
             .Concat(session.TableRows.OfPerson(person.Id, RowKind.Sets))

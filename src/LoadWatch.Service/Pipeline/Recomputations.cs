@@ -12,7 +12,7 @@ namespace LoadWatch.Service.Pipeline;
 /// measured). One person after the other; a content is done in the commit of its new rows, so whoever is stopped goes on with the rest, and until then the old
 /// rows stand.
 /// </summary>
-public sealed class Recomputations(Store store, ArchiveReader reader, ArrivalDecoder decoder, Settlement settlement, SweepReport report)
+public sealed class Recomputations(Store store, ArchiveReader reader, Settlement settlement, SweepReport report)
 {
     private const int ReadTogether = 256;
 
@@ -112,11 +112,5 @@ public sealed class Recomputations(Store store, ArchiveReader reader, ArrivalDec
     }
 
     /// <summary>The others go on; the row says what is missing, and a later rebuild finds it again once the original is back.</summary>
-    private void Refuse(string sha, string reason) => store.Write(session =>
-    {
-        var effects = new ArrivalEffects(session, decoder);
-        effects.Apply(new DecodedArrival(sha, "unknown", new ArrivalVerdict(ArrivalState.Refused, reason, null), []));
-        effects.Finish();
-        session.Outdated.Done([sha]);
-    });
+    private void Refuse(string sha, string reason) => settlement.Refuse(sha, reason, session => session.Outdated.Done([sha]));
 }

@@ -92,7 +92,7 @@ public sealed class Recovery(Store store, Archive archive, ArchiveReader reader,
     }
 
     private void Refuse(Arrival arrival, string reason) =>
-        store.Write(session => session.Arrivals.Settle(arrival.Sha, ArrivalState.Refused, "unknown", reason, null));
+        settlement.Refuse(arrival.Sha, reason);
 }
 
 /// <summary>Tries whether decoding a file ends the process that does it.</summary>

@@ -34,8 +34,8 @@ public sealed class Renewal(WorkingConfiguration configuration, Store store, Tab
 
     private ActivityValues Renewed(StoreSession session, StoredActivity activity)
     {
-        var winner = activity.Winner;
+        var joined = activity.Session;
         var values = activity.Values with { Histograms = session.Activities.Histograms(activity.Key) };
-        return HistogramRenewal.Of(values, winner.Sport, winner.Date, configuration.People[winner.Person], basis.Anchors, configuration.Computation);
+        return HistogramRenewal.Of(values, joined.Sport, joined.Date, configuration.People[joined.Person], basis.Anchors, configuration.Computation);
     }
 }

@@ -40,10 +40,14 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
         var pending = store.Read(session => Pending(session, seen, force, gone));
         var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims, item.IsDecided)).ToList();
         var before = pending.ToDictionary(item => item.Content.Sha, item => item.Before, StringComparer.Ordinal);
+        var shelf = new RecordingShelf(decoder);
+        decoded.ForEach(arrival => arrival.Recordings.ToList().ForEach(shelf.Add));
+        var values = new SessionValues(decoder, shelf);
+        new Foresight(store, shelf, values).LookAhead(decoded);
         KillPoint.Pass("decoded");
         Finish();
         inCommit = seen.Select(item => item.Content.Sha).ToHashSet(StringComparer.Ordinal);
-        committing = Task.Run(() => Commit(seen, decoded, before, alongside));
+        committing = Task.Run(() => Commit(seen, decoded, before, alongside, session => new ArrivalEffects(session, shelf, values)));
     }
 
     /// <summary>Does something once everything that began is durable.</summary>
@@ -66,18 +70,19 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
     }
 
     private void Commit(
-        IReadOnlyList<SeenContent> seen, IReadOnlyList<DecodedArrival> decoded, Dictionary<string, ArrivalState?> before, Action<StoreSession> alongside)
+        IReadOnlyList<SeenContent> seen,
+        List<DecodedArrival> decoded,
+        Dictionary<string, ArrivalState?> before,
+        Action<StoreSession> alongside,
+        Func<StoreSession, ArrivalEffects> effectsIn)
     {
         store.Write(session =>
         {
             alongside(session);
             RecordMembers(session, seen);
-            var effects = new ArrivalEffects(session, decoder);
-            foreach (var arrival in decoded)
-            {
-                effects.Apply(arrival);
-            }
-
+            var effects = effectsIn(session);
+            decoded.ForEach(effects.Apply);
+            seen.Select(item => item.Content.Sha).Distinct(StringComparer.Ordinal).ToList().ForEach(effects.TouchNames);
             effects.Finish();
         });
         foreach (var arrival in decoded.Where(arrival => before[arrival.Sha] != arrival.Verdict.State))
@@ -87,6 +92,18 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
 
         report.Advanced();
     }
+
+    /// <summary>Refuses an arrival that is not to be decoded; what it gave goes, and what its names held before counts as it did before it came.</summary>
+    /// <param name="alongside">Written in the same commit.</param>
+    public void Refuse(string sha, string reason, Action<StoreSession>? alongside = null) => store.Write(session =>
+    {
+        var shelf = new RecordingShelf(decoder);
+        var effects = new ArrivalEffects(session, shelf, new SessionValues(decoder, shelf));
+        effects.Apply(new DecodedArrival(sha, "unknown", new ArrivalVerdict(ArrivalState.Refused, reason, null), []));
+        effects.TouchNames(sha);
+        effects.Finish();
+        alongside?.Invoke(session);
+    });
 
     /// <summary>Contents that are new, or whose owner is told differently now, each once.</summary>
     private List<(ArrivalContent Content, IReadOnlyList<string> Claims, bool IsDecided, ArrivalState? Before)> Pending(

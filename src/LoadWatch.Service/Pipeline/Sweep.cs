@@ -42,11 +42,11 @@ public sealed class Sweep
         settlement = new Settlement(configuration, store, decoder, Report);
         intake = new Intake(configuration, store, archive, decoders, settlement, this.known, now, Report);
         recovery = new Recovery(store, archive, reader, settlement, probe);
-        moved = new MovedFiles(configuration, store, reader, settlement, this.known, now);
+        moved = new MovedFiles(configuration, store, reader, settlement, this.known, now, Report);
         answers = new Answers(configuration, now);
         assigned = new AssignedFiles(configuration, store, reader, settlement, Report);
         tables = new Tables(configuration, store, decoder, Report);
-        recomputations = new Recomputations(store, reader, decoder, settlement, Report);
+        recomputations = new Recomputations(store, reader, settlement, Report);
         briefs = new Briefs(configuration, now, Report.Unreadable, Report.MissingInboxes);
     }
 
@@ -54,6 +54,9 @@ public sealed class Sweep
 
     /// <summary>Whether the pages tell all that was known before this sweep; only then may it leave those alone that it has no news for.</summary>
     public bool PagesAreCurrent { get; init; }
+
+    /// <summary>Kept from sweep to sweep, since a look into an inbox may hang longer than a sweep lasts.</summary>
+    public InboxLooks Looks { get; init; } = new();
 
     public bool PagesAreWritten { get; private set; }
 
@@ -67,9 +70,7 @@ public sealed class Sweep
     {
         Adopt();
         recovery.Run(cancel);
-        Inboxes.MakePersonFolders(configuration);
-        InboxRemoval.PutBack(configuration);
-        intake.TakeIn(Inboxes.Changed(configuration, store, known, Report), cancel);
+        intake.TakeIn(Inboxes.Changed(configuration, store, Looks, known, now, Report), cancel);
         moved.TakeUp();
         Recompute(IsFromNothing ? Patience.Endless : new Patience(RecomputesFor), cancel);
         Report.Take(store.Write(answers.TakeUp));

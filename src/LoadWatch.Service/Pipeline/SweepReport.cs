@@ -1,5 +1,6 @@
 using LoadWatch.Notices;
 using LoadWatch.Recordings;
+using LoadWatch.Service.Arrivals;
 
 namespace LoadWatch.Service.Pipeline;
 
@@ -18,8 +19,11 @@ public sealed class SweepReport
     /// <summary>Files that could not be opened or read, by path, with the reason; looked at again.</summary>
     public List<BriefLine> Unreadable { get; } = [];
 
-    /// <summary>Inboxes that could not be listed.</summary>
+    /// <summary>Names of inboxes that could not be looked into.</summary>
     public List<string> MissingInboxes { get; } = [];
+
+    /// <summary>What the look into each inbox found, in their order.</summary>
+    public IReadOnlyList<InboxLook> Looks { get; private set; } = [];
 
     /// <summary>Arrivals settled by this sweep, by state; members of archives count on their own.</summary>
     public SortedDictionary<ArrivalState, int> Settled { get; } = [];
@@ -54,6 +58,9 @@ public sealed class SweepReport
     /// <summary>Deliveries that are not tried again, with the reason.</summary>
     public List<string> GivenUp { get; } = [];
 
+    /// <summary>Mails that the server took.</summary>
+    public int MailsDelivered { get; set; }
+
     /// <summary>Contacts and channels by which nothing got through at the last try.</summary>
     public int Missed { get; set; }
 
@@ -69,6 +76,14 @@ public sealed class SweepReport
     {
         AnswersTaken += answers.Made + answers.Withdrawn;
         OpenAnswers = answers.Questions;
+    }
+
+    public void Take(IReadOnlyList<InboxLook> looks)
+    {
+        Looks = looks;
+        Seen += looks.Sum(look => look.Seen);
+        MissingInboxes.AddRange(looks.Where(look => look.Away is not null).Select(look => look.Inbox.Name));
+        Unreadable.AddRange(looks.Where(look => look.Unreadable.Count > 0).Select(UnreadableNames.Line));
     }
 
     public void Count(ArrivalState state) => Settled[state] = CountOf(state) + 1;

@@ -1,30 +1,42 @@
 using LoadWatch.Service.Commands;
+using LoadWatch.Service.Health;
 using Microsoft.Extensions.Hosting;
 using Microsoft.Extensions.Logging;
 using Quartz;
 
 namespace LoadWatch.Service.Schedule;
 
-/// <summary>Wakes the scan when a folder stirs, at most once every few seconds. The scan finds everything without it.</summary>
-public sealed class InboxWatcher(Workplace workplace, ISchedulerFactory schedulers, TimeProvider clock, ILogger<InboxWatcher> log) : BackgroundService
+/// <summary>
+/// Wakes the scan when a folder stirs, at most once every few seconds; the scan finds everything without it. It also wakes a scan that is overdue: the
+/// scheduler goes by the wall clock, and one that is set back would let it wait.
+/// </summary>
+public sealed class InboxWatcher(
+    Workplace workplace,
+    ISchedulerFactory schedulers,
+    SupervisedSweep sweep,
+    SweepHeartbeat sweeps,
+    WatchHeartbeat heartbeat,
+    TimeProvider clock,
+    ILogger<InboxWatcher> log) : BackgroundService
 {
     private static readonly TimeSpan Pause = TimeSpan.FromSeconds(5);
 
-    private volatile bool stirred;
-
     protected override async Task ExecuteAsync(CancellationToken stoppingToken)
     {
-        var watchers = workplace.Configuration.Inboxes.Select(inbox => Watch(inbox.Path)).OfType<FileSystemWatcher>().ToList();
+        using var events = new FolderEvents(reason => LogMessages.WatchingFailed(log, reason));
+        var scheduler = await schedulers.GetScheduler(stoppingToken);
+        using var timer = new PeriodicTimer(Pause, clock);
         try
         {
-            var scheduler = await schedulers.GetScheduler(stoppingToken);
-            using var timer = new PeriodicTimer(Pause, clock);
             while (await timer.WaitForNextTickAsync(stoppingToken))
             {
-                if (stirred)
+                heartbeat.Beat();
+                events.Follow(Folders());
+
+                // What stirs during a sweep waits for its end: every trigger would be a sweep of its own.
+                if (!sweep.IsRunning && (events.HaveStirred() | IsOverdue()))
                 {
-                    stirred = false;
-                    await scheduler.TriggerJob(new JobKey("sweep"), stoppingToken);
+                    await scheduler.TriggerJob(ServiceHost.SweepKey, stoppingToken);
                 }
             }
         }
@@ -32,28 +44,13 @@ public sealed class InboxWatcher(Workplace workplace, ISchedulerFactory schedule
         {
             // The service stops.
         }
-        finally
-        {
-            watchers.ForEach(watcher => watcher.Dispose());
-        }
     }
 
-    private FileSystemWatcher? Watch(string path)
-    {
-        try
-        {
-            var watcher = new FileSystemWatcher(path) { IncludeSubdirectories = true };
-            watcher.Created += (_, _) => stirred = true;
-            watcher.Changed += (_, _) => stirred = true;
-            watcher.Renamed += (_, _) => stirred = true;
-            watcher.Error += (_, _) => stirred = true;
-            watcher.EnableRaisingEvents = true;
-            return watcher;
-        }
-        catch (Exception e) when (e is IOException or ArgumentException or UnauthorizedAccessException)
-        {
-            Health.LogMessages.WatchingFailed(log, e.Message);
-            return null;
-        }
-    }
+    /// <summary>The folders as the last scan found them: one that did not answer the scan is not asked here.</summary>
+    private IEnumerable<WatchedFolder> Folders() => workplace.Configuration.Inboxes
+        .Select(inbox => workplace.Looks.RootOf(inbox.Name))
+        .Where(root => root is not null)
+        .Select(root => new WatchedFolder(root!.Path, root.FolderId));
+
+    private bool IsOverdue() => sweeps.Since > workplace.Configuration.ScanEvery.ToTimeSpan() + Pause;
 }

@@ -21,7 +21,7 @@ public static class ServiceHost
 
     private const string WindowsName = "LoadWatch";
 
-    private static readonly JobKey SweepKey = new("sweep");
+    internal static readonly JobKey SweepKey = new("sweep");
 
     /// <summary>Quartz in memory: schedules come from the configuration, and what was missed is caught up from our own tables (I-7).</summary>
     public static IHost Build(Workplace workplace, string configPath)
@@ -33,13 +33,17 @@ public static class ServiceHost
         builder.Services.Configure<HostOptions>(options => options.ShutdownTimeout = StopsWithin);
         builder.Services.AddSingleton(TimeProvider.System);
         builder.Services.AddSingleton<ServiceEnd>();
-        builder.Services.AddSingleton(new Heartbeat(TimeProvider.System, workplace.Configuration.ScanEvery.ToTimeSpan() + Heartbeat.LongestStep));
+        AddHeartbeats(builder.Services, workplace.Configuration.ScanEvery.ToTimeSpan());
+        builder.Services.AddSingleton(new ServiceRecord(MachineClock.Now()));
+        builder.Services.AddSingleton(new ClockGuard(workplace.Store));
         builder.Services.AddSingleton(workplace);
         builder.Services.AddSingleton(new ConfigurationFile(configPath));
-        builder.Services.AddSingleton<StatusFile>();
+        builder.Services.AddSingleton<Statuses>();
+        builder.Services.AddSingleton<SupervisedSweep>();
         builder.Services.AddQuartz(quartz => Schedule(quartz, workplace));
         builder.Services.AddQuartzHostedService(options => options.WaitForJobsToComplete = true);
         builder.Services.AddHostedService<InboxWatcher>();
+        builder.Services.AddHostedService<StatusTimer>();
         return builder.Build();
     }
 
@@ -57,6 +61,13 @@ public static class ServiceHost
         {
             NameEventSource(services);
         }
+    }
+
+    private static void AddHeartbeats(IServiceCollection services, TimeSpan scanEvery)
+    {
+        var (sweep, status, watch) = (new SweepHeartbeat(TimeProvider.System, scanEvery), new StatusHeartbeat(TimeProvider.System), new WatchHeartbeat(TimeProvider.System));
+        services.AddSingleton(sweep).AddSingleton(status).AddSingleton(watch);
+        services.AddSingleton<Heartbeat>(sweep).AddSingleton<Heartbeat>(status).AddSingleton<Heartbeat>(watch);
     }
 
     /// <summary>The source that the install script makes; without it the log files remain.</summary>

@@ -15,7 +15,10 @@ internal sealed class ActivityRow : RecordingRow
 
     public LocalDate Date { get; init; }
 
-    public string Recordings { get; init; } = "";
+    public string Recordings { get; set; } = "";
+
+    /// <summary>Null where it is as the winner says.</summary>
+    public string? Session { get; init; }
 
     public double? HeartRateMeanBpm { get; init; }
 
@@ -35,14 +38,18 @@ internal sealed class ActivityRow : RecordingRow
 
     public string Stimulus { get; init; } = "";
 
+    /// <summary>Null for a row of before checksums were kept.</summary>
+    public string? Checksum { get; set; }
+
     public static ActivityRow From(StoredActivity activity) => new()
     {
         Key = activity.Key,
         Sha = activity.Winner.Sha,
         Part = activity.Winner.Part,
         Person = activity.Winner.Person,
-        Date = activity.Winner.Date,
-        Recordings = JsonText.Write(activity.RecordingKeys),
+        Date = activity.Date,
+        Recordings = Text(activity.Merge.Contributions),
+        Session = activity.Merge.Frame == SessionFrame.Of(activity.Winner) ? null : JsonText.Write(activity.Merge.Frame),
         HeartRateMeanBpm = activity.Values.HeartRateMeanBpm,
         HeartRateMaxBpm = activity.Values.HeartRateMaxBpm,
         PowerMeanWatts = activity.Values.PowerMeanWatts,
@@ -53,6 +60,9 @@ internal sealed class ActivityRow : RecordingRow
         Quantities = JsonText.Write(activity.Values.Quantities),
         Stimulus = JsonText.Write(activity.Values.Stimulus),
     };
+
+    /// <summary>As <see cref="Recordings"/> holds them.</summary>
+    public static string Text(IReadOnlyList<Contribution> contributions) => JsonText.Write(contributions);
 
     public StoredActivity ToActivity()
     {
@@ -68,6 +78,12 @@ internal sealed class ActivityRow : RecordingRow
             Quantities = JsonText.Read<List<Quantity>>(Quantities),
             Stimulus = JsonText.Read<List<RegionStimulus>>(Stimulus),
         };
-        return new StoredActivity(ToRecording(), values, JsonText.Read<List<string>>(Recordings));
+        return new StoredActivity(ToMerge(), values);
+    }
+
+    public StoredMerge ToMerge()
+    {
+        var winner = ToRecording();
+        return new StoredMerge(winner, Session is { } frame ? JsonText.Read<SessionFrame>(frame) : SessionFrame.Of(winner), JsonText.Read<List<Contribution>>(Recordings));
     }
 }

@@ -11,30 +11,42 @@ public sealed class ActivityTable
 {
     private const string Insert = """
         INSERT INTO activity (
-            key, sha, part, person, date, recordings, heart_rate_mean_bpm, heart_rate_max_bpm,
-            power_mean_watts, power_max_watts, usable_share, times_in_zone, remarks, quantities, stimulus)
+            key, sha, part, person, date, recordings, session, heart_rate_mean_bpm, heart_rate_max_bpm,
+            power_mean_watts, power_max_watts, usable_share, times_in_zone, remarks, quantities, stimulus, checksum)
         VALUES (
-            @Key, @Sha, @Part, @Person, @Date, @Recordings, @HeartRateMeanBpm, @HeartRateMaxBpm,
-            @PowerMeanWatts, @PowerMaxWatts, @UsableShare, @TimesInZone, @Remarks, @Quantities, @Stimulus)
+            @Key, @Sha, @Part, @Person, @Date, @Recordings, @Session, @HeartRateMeanBpm, @HeartRateMaxBpm,
+            @PowerMeanWatts, @PowerMaxWatts, @UsableShare, @TimesInZone, @Remarks, @Quantities, @Stimulus, @Checksum)
         """;
 
-    private const string InsertHistogram = "INSERT INTO histogram (activity, channel, bins) VALUES (@activity, @channel, @bins)";
+    private const string InsertHistogram = "INSERT INTO histogram (activity, channel, bins) VALUES (@Activity, @Channel, @Bins)";
 
-    private const string Update = "UPDATE activity SET times_in_zone = @TimesInZone, remarks = @Remarks, quantities = @Quantities WHERE key = @Key";
+    private const string UpdateRecordings = "UPDATE activity SET recordings = @Recordings, checksum = @Checksum WHERE key = @Key";
+
+    private const string Update = "UPDATE activity SET times_in_zone = @TimesInZone, remarks = @Remarks, quantities = @Quantities, checksum = @Checksum WHERE key = @Key";
 
     // Its histograms go with it.
     private const string Delete = "DELETE FROM activity WHERE key = @key";
 
     private const string SelectActivities = """
-        SELECT r.*, a.key, a.date, a.recordings, a.heart_rate_mean_bpm, a.heart_rate_max_bpm,
-            a.power_mean_watts, a.power_max_watts, a.usable_share, a.times_in_zone, a.remarks, a.quantities, a.stimulus
+        SELECT r.*, a.key, a.date, a.recordings, a.session, a.heart_rate_mean_bpm, a.heart_rate_max_bpm,
+            a.power_mean_watts, a.power_max_watts, a.usable_share, a.times_in_zone, a.remarks, a.quantities, a.stimulus, a.checksum
         FROM activity a JOIN recording r ON r.sha = a.sha AND r.part = a.part
+        """;
+
+    private const string SelectMerges = """
+        SELECT r.*, a.key, a.date, a.recordings, a.session
+        FROM activity a JOIN recording r ON r.sha = a.sha AND r.part = a.part
+        WHERE r.person = @person AND r.start >= @from AND r.start <= @to
+        ORDER BY r.start, a.key
         """;
 
     private const string InDates = " WHERE a.date >= @from AND a.date <= @to";
     private const string OfPersonInDates = InDates + " AND a.person = @person";
-    private const string SelectHistograms = "SELECT channel, bins FROM histogram WHERE activity = @key";
     private const string SelectHistogram = "SELECT bins FROM histogram WHERE activity = @key AND channel = @channel";
+
+    private const string SelectPage = SelectActivities + " WHERE a.key > @after ORDER BY a.key LIMIT @most";
+    private const string SelectOne = SelectActivities + " WHERE a.key = @key";
+    private const string SelectHistograms = "SELECT activity, channel, bins FROM histogram WHERE activity >= @first AND activity <= @last ORDER BY activity, channel";
 
     private readonly StoreSession session;
 
@@ -44,12 +56,31 @@ public sealed class ActivityTable
     public void Put(StoredActivity activity)
     {
         Remove(activity.Key);
-        session.Execute(Insert, ActivityRow.From(activity));
-        session.ExecuteEach(InsertHistogram, HistogramRows(activity));
+        var row = ActivityRow.From(activity);
+        var histograms = HistogramRows(activity);
+        row.Checksum = ActivityChecksum.Of(row, histograms);
+        session.Execute(Insert, row);
+        session.ExecuteEach(InsertHistogram, histograms);
+    }
+
+    /// <summary>Notes what became of the recordings of an activity whose values stay. Nothing when there is none.</summary>
+    public void PutRecordings(StoredMerge merge)
+    {
+        if (session.Row<ActivityRow>(SelectOne, new { key = merge.Winner.Key }) is { } row)
+        {
+            row.Recordings = ActivityRow.Text(merge.Contributions);
+            row.Checksum = ActivityChecksum.Of(row, session.Rows<HistogramRow>(SelectHistograms, new { first = row.Key, last = row.Key }));
+            session.Execute(UpdateRecordings, row);
+        }
     }
 
     /// <summary>Stores what histograms and reference values tell in place of what they told; all else stays.</summary>
-    public void Renew(StoredActivity activity) => session.Execute(Update, ActivityRow.From(activity));
+    public void Renew(StoredActivity activity)
+    {
+        var row = ActivityRow.From(activity);
+        row.Checksum = ActivityChecksum.Of(row, session.Rows<HistogramRow>(SelectHistograms, new { first = row.Key, last = row.Key }));
+        session.Execute(Update, row);
+    }
 
     /// <summary>Removes an activity; nothing when there is none.</summary>
     public void Remove(string key) => session.Execute(Delete, new { key });
@@ -63,22 +94,48 @@ public sealed class ActivityTable
         Select(InDates, new { from = from ?? LocalDate.MinIsoValue, to = to ?? LocalDate.MaxIsoValue });
 
     /// <summary>Time by value of every channel that has one.</summary>
-    public IReadOnlyDictionary<Channel, Histogram> Histograms(string key)
-    {
-        var histograms = new Dictionary<Channel, Histogram>();
-        session.EachRow(SelectHistograms, new { key }, row => histograms[Words<Channel>.Parse(row.GetString(0))] = HistogramCodec.Read((byte[])row.GetValue(1)));
-        return histograms;
-    }
+    public IReadOnlyDictionary<Channel, Histogram> Histograms(string key) => session.Rows<HistogramRow>(SelectHistograms, new { first = key, last = key })
+        .ToDictionary(row => Words<Channel>.Parse(row.Channel), row => HistogramCodec.Read(row.Bins));
+
+    /// <summary>How a person's activities were made whose winning recordings start in the range, both ends included, sorted by that start and by key.</summary>
+    public IReadOnlyList<StoredMerge> Merges(string person, Instant from, Instant to) =>
+        session.Rows<ActivityRow>(SelectMerges, new { person, from, to }).ConvertAll(row => row.ToMerge());
 
     /// <summary>Time by value of one channel, or null where the activity has none.</summary>
     public Histogram? Histogram(string key, Channel channel) =>
         session.Value<byte[]>(SelectHistogram, new { key, channel = Words<Channel>.Of(channel) }) is { } bins ? HistogramCodec.Read(bins) : null;
 
-    private static IEnumerable<object> HistogramRows(StoredActivity activity) =>
-        activity.Values.Histograms
-            .OrderBy(pair => pair.Key)
-            .Select(pair => new { activity = activity.Key, channel = Words<Channel>.Of(pair.Key), bins = HistogramCodec.Write(pair.Value) });
+    /// <summary>Looks whether activities are what was written, in ordinal order of their keys.</summary>
+    /// <param name="after">Only those behind this key.</param>
+    public IReadOnlyList<CheckedActivity> Check(string after, int most)
+    {
+        var rows = session.Rows<ActivityRow>(SelectPage, new { after, most });
+        var histograms = rows.Count == 0
+            ? []
+            : session.Rows<HistogramRow>(SelectHistograms, new { first = rows[0].Key, last = rows[^1].Key });
+        var byActivity = histograms.ToLookup(row => row.Activity, StringComparer.Ordinal);
+        return rows.ConvertAll(row => Check(row, byActivity[row.Key]));
+    }
 
-    private List<StoredActivity> Select(string where, object values) =>
-        session.Rows<ActivityRow>(SelectActivities + where + " ORDER BY a.date, r.start, a.key", values).ConvertAll(row => row.ToActivity());
+    private static CheckedActivity Check(ActivityRow row, IEnumerable<HistogramRow> histograms)
+    {
+        var now = ActivityChecksum.Of(row, histograms);
+        return new CheckedActivity(row.Key, row.Person, row.Date, row.Sha, now, row.Checksum is { } written ? written == now : null);
+    }
+
+    private static List<HistogramRow> HistogramRows(StoredActivity activity) =>
+    [
+        .. activity.Values.Histograms
+            .Select(pair => new HistogramRow { Activity = activity.Key, Channel = Words<Channel>.Of(pair.Key), Bins = HistogramCodec.Write(pair.Value) })
+            .OrderBy(row => row.Channel, StringComparer.Ordinal),
+    ];
+
+    private IReadOnlyList<StoredActivity> Select(string where, object values) =>
+    [
+        .. session.Rows<ActivityRow>(SelectActivities + where, values)
+            .Select(row => row.ToActivity())
+            .OrderBy(activity => activity.Date)
+            .ThenBy(activity => activity.Session.Start)
+            .ThenBy(activity => activity.Key, StringComparer.Ordinal),
+    ];
 }

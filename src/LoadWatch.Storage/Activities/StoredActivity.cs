@@ -1,14 +1,29 @@
 using LoadWatch.Activities;
+using NodaTime;
 
 namespace LoadWatch.Storage.Activities;
 
 /// <summary>What counts: one or more recordings of the same session, merged.</summary>
-/// <param name="Winner">The recording that the activity is named by.</param>
-/// <param name="Values">
-/// Computed from it. As read by person or date it holds no histograms: <see cref="ActivityTable.Histogram"/> reads those.
-/// </param>
-/// <param name="RecordingKeys">Keys of all its recordings, sorted ordinally, the winner's among them.</param>
-public sealed record StoredActivity(RecordingSummary Winner, ActivityValues Values, IReadOnlyList<string> RecordingKeys)
+/// <param name="Values">As read by person or date they hold no histograms: <see cref="ActivityTable.Histogram"/> reads those.</param>
+public sealed record StoredActivity(StoredMerge Merge, ActivityValues Values)
 {
+    /// <summary>An activity of one recording alone.</summary>
+    public StoredActivity(RecordingSummary alone, ActivityValues values)
+        : this(StoredMerge.Of(alone), values)
+    {
+    }
+
     public string Key => Winner.Key;
+
+    /// <summary>The recording that the activity is named by.</summary>
+    public RecordingSummary Winner => Merge.Winner;
+
+    /// <inheritdoc cref="StoredMerge.Session"/>
+    public RecordingSummary Session => Merge.Session;
+
+    /// <inheritdoc cref="StoredMerge.Date"/>
+    public LocalDate Date => Merge.Date;
+
+    /// <summary>Keys of all its recordings, sorted ordinally, the winner's among them.</summary>
+    public IReadOnlyList<string> RecordingKeys => [.. Merge.Contributions.Select(one => one.Key).Order(StringComparer.Ordinal)];
 }

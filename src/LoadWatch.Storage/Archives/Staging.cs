@@ -1,3 +1,5 @@
+using LoadWatch.Storage.Files;
+
 namespace LoadWatch.Storage.Archives;
 
 /// <summary>What came of copying into the archive: a <see cref="StagedCopy"/> or <see cref="OverLimit"/>.</summary>
@@ -39,7 +41,7 @@ public sealed record StagedCopy : Staging, IDisposable
     /// <summary>Waits until the copy is on the disk, through the handle by which it was written: an error of the disk shows there.</summary>
     internal void Sync()
     {
-        file.Flush(flushToDisk: true);
+        DurableFile.Sync(file);
         file.Dispose();
     }
 }

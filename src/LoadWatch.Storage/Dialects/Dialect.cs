@@ -32,6 +32,9 @@ public abstract class Dialect
     /// <summary>Brings erased content out of the side files too. False when a reader was in the way.</summary>
     public abstract bool Checkpoint(DbConnection connection);
 
+    /// <summary>Copies the whole database as it is at one moment, while others write, into a file that must not be there yet.</summary>
+    public abstract void CopyTo(DbConnection connection, string path);
+
     /// <summary>What the engine finds wrong with its own file, in its words; empty when nothing.</summary>
     public abstract IReadOnlyList<string> Check(DbConnection connection);
 }

@@ -19,6 +19,7 @@ internal static class JsonText
         {
             new JsonStringEnumConverter(JsonNamingPolicy.SnakeCaseLower, allowIntegerValues: false),
             new JsonDates<LocalDate>(LocalDatePattern.Iso),
+            new JsonDates<Instant>(ColumnTypes.Moment),
             new JsonDates<LocalTime>(LocalTimePattern.ExtendedIso),
         },
     };

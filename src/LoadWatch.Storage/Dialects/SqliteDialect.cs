@@ -26,10 +26,12 @@ public sealed class SqliteDialect : Dialect
     {
         this.path = path;
 
+        // Never created by opening: a deleted database would come back empty. Prepare makes the file.
         // The provider retries a busy database itself until this timeout (seconds); the engine's own setting would come on top.
         connectionString = new SqliteConnectionStringBuilder
         {
             DataSource = path,
+            Mode = SqliteOpenMode.ReadWrite,
             DefaultTimeout = 5,
             ForeignKeys = true,
             Pooling = false,
@@ -42,9 +44,32 @@ public sealed class SqliteDialect : Dialect
     {
         // Made here with its mode; SQLite gives its side files the mode of the database.
         PrivateFiles.OpenOrCreate(path, FileShare.ReadWrite).Dispose();
-        RefuseForeign();
+        using (var bare = new SqliteConnection(connectionString))
+        {
+            RefuseForeign(bare, mark: true);
+        }
+
         using var connection = OpenWriter();
         new SqliteSchema(connectionString).Upgrade(connection);
+    }
+
+    /// <summary>Refuses what <see cref="Prepare"/> would have to change first.</summary>
+    /// <exception cref="DatabaseRefusedException">There is no database, or it is not one of this version.</exception>
+    public void RefuseUnprepared()
+    {
+        if (!File.Exists(path))
+        {
+            throw new DatabaseRefusedException($"there is no {path} yet");
+        }
+
+        using var connection = new SqliteConnection(connectionString);
+        RefuseForeign(connection, mark: false);
+        var had = connection.ExecuteScalar<long>("PRAGMA user_version");
+        if (had != SqliteSchema.Scripts.Count)
+        {
+            throw new DatabaseRefusedException(
+                string.Create(CultureInfo.InvariantCulture, $"{path} has the schema {had}, this program {SqliteSchema.Scripts.Count}: the service upgrades it when it starts"));
+        }
     }
 
     public override DbConnection OpenWriter() => Open("PRAGMA query_only=OFF");
@@ -60,8 +85,26 @@ public sealed class SqliteDialect : Dialect
 
     public override bool Checkpoint(DbConnection connection) => connection.ExecuteScalar<long>("PRAGMA wal_checkpoint(TRUNCATE)") == 0;
 
-    public override IReadOnlyList<string> Check(DbConnection connection) =>
-        [.. connection.Query<string>("PRAGMA integrity_check").Where(line => !string.Equals(line, "ok", StringComparison.Ordinal))];
+    public override void CopyTo(DbConnection connection, string path)
+    {
+        // Made here with its mode; the engine takes an empty file for a new database.
+        PrivateFiles.OpenOrCreate(path, FileShare.None).Dispose();
+        using var copy = new SqliteConnection(new SqliteConnectionStringBuilder { DataSource = path, Mode = SqliteOpenMode.ReadWrite, Pooling = false }.ConnectionString);
+        copy.Open();
+        ((SqliteConnection)connection).BackupDatabase(copy);
+    }
+
+    public override IReadOnlyList<string> Check(DbConnection connection)
+    {
+        try
+        {
+            return [.. connection.Query<string>("PRAGMA integrity_check").Where(line => !string.Equals(line, "ok", StringComparison.Ordinal))];
+        }
+        catch (SqliteException error) when (StoreTroubles.Of(error) == StoreTrouble.Damaged)
+        {
+            return [error.Message];
+        }
+    }
 
     internal static void RefuseOldEngine(string version)
     {
@@ -96,23 +139,23 @@ public sealed class SqliteDialect : Dialect
     }
 
     // On a bare connection: even a change of the journal would leave its mark in another program's file.
-    private void RefuseForeign()
+    private void RefuseForeign(SqliteConnection connection, bool mark)
     {
-        using var connection = new SqliteConnection(connectionString);
         try
         {
             connection.Open();
             RefuseOldEngine(connection.ServerVersion);
-            MarkOrRefuse(connection);
+            MarkOrRefuse(connection, mark);
         }
         catch (SqliteException error) when (error.SqliteErrorCode == NotADatabase)
         {
-            throw new DatabaseRefusedException($"{path} is no SQLite database: left as it is");
+            throw new DatabaseRefusedException(
+                $"{path} is no SQLite database: left as it is. If it was one of LoadWatch, its beginning is damaged: put it back from a backup (deploy/README.md, Backing up and restoring)");
         }
     }
 
     // The mark goes into the empty file before any table, so a kill in between leaves no file that looks foreign.
-    private void MarkOrRefuse(SqliteConnection connection)
+    private void MarkOrRefuse(SqliteConnection connection, bool mark)
     {
         var id = connection.ExecuteScalar<long>("PRAGMA application_id");
         if (id == ApplicationId)
@@ -120,7 +163,7 @@ public sealed class SqliteDialect : Dialect
             return;
         }
 
-        if (id != 0 || connection.ExecuteScalar<long>("SELECT COUNT(*) FROM sqlite_master") > 0)
+        if (!mark || id != 0 || connection.ExecuteScalar<long>("SELECT COUNT(*) FROM sqlite_master") > 0)
         {
             throw new DatabaseRefusedException($"{path} is a database of another program (application id {id}): left as it is");
         }

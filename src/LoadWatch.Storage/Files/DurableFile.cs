@@ -5,7 +5,23 @@ namespace LoadWatch.Storage.Files;
 /// <summary>The steps that make a file survive a power cut, each a step of its own because their order is what counts (I-2).</summary>
 public static class DurableFile
 {
+    /// <summary>Makes the bytes of a written file durable.</summary>
+    /// <exception cref="DurabilityLostException">The disk failed: nothing that was written lately can be trusted.</exception>
+    /// <exception cref="IOException">There is no room for them.</exception>
+    public static void Sync(FileStream file)
+    {
+        if (OperatingSystem.IsWindows())
+        {
+            file.Flush(flushToDisk: true);
+            return;
+        }
+
+        file.Flush();
+        Sync(file.SafeFileHandle.DangerousGetHandle().ToInt32(), file.Name);
+    }
+
     /// <summary>Makes the names in a folder durable. Windows has no such call: its file systems log names by themselves.</summary>
+    /// <inheritdoc cref="Sync(FileStream)"/>
     public static void SyncFolder(string path)
     {
         if (OperatingSystem.IsWindows())
@@ -21,10 +37,7 @@ public static class DurableFile
 
         try
         {
-            if (LinuxCalls.Sync(descriptor) != 0)
-            {
-                throw Failed("sync folder", path);
-            }
+            Sync(descriptor, path);
         }
         finally
         {
@@ -56,8 +69,8 @@ public static class DurableFile
         OperatingSystem.IsLinux() ? RenameOnLinux(from, to) : RenameElsewhere(from, to);
 
     /// <summary>
-    /// Writes a whole file in place of another: aside, then renamed. A reader meets the old or the new one. For what every sweep writes anew: nothing waits for
-    /// the disk, since after a power cut the next sweep writes it again.
+    /// Writes a whole file in place of another: aside, then renamed. A reader meets the old or the new one. It is not synced, for files that are written anew
+    /// all the time: only a power cut can tear it.
     /// </summary>
     public static void Replace(string path, ReadOnlySpan<byte> bytes)
     {
@@ -69,6 +82,34 @@ public static class DurableFile
         }
 
         File.Move(aside, path, overwrite: true);
+    }
+
+    // Where a file system cannot sync (EINVAL, ENOTSUP, EROFS) nothing was promised and nothing was lost; where it is full the copy goes, and the next one
+    // may find room. After anything else the system may have dropped what it could not write, and the next sync would claim success over it.
+    private static void Sync(int descriptor, string path)
+    {
+        switch (ErrorOfSync(descriptor))
+        {
+            case 0:
+                return;
+            case Errno.Invalid or Errno.NotSupported or Errno.ReadOnly:
+                return;
+            case Errno.NoSpace or Errno.NoQuota:
+                throw Failed("sync", path);
+            default:
+                throw new DurabilityLostException(Failed("sync", path));
+        }
+    }
+
+    private static int ErrorOfSync(int descriptor)
+    {
+        int error;
+        do
+        {
+            error = LinuxCalls.Sync(descriptor) == 0 ? 0 : Marshal.GetLastPInvokeError();
+        }
+        while (error == Errno.Interrupted);
+        return error;
     }
 
     private static bool RenameOnLinux(string from, string to)

@@ -20,6 +20,9 @@ internal static partial class LinuxCalls
     /// <summary>Type, mode, size, times, inode: STATX_BASIC_STATS.</summary>
     public const uint BasicStats = 0x7ff;
 
+    /// <summary>These, and the time of birth: STATX_BASIC_STATS and STATX_BTIME.</summary>
+    public const uint StatsWithBirth = 0xfff;
+
     // The two flags differ between the generic and the ARM ABI.
     public static readonly int OnlyFolder = OnArm ? 0x4000 : 0x10000;
     public static readonly int NoFollow = OnArm ? 0x8000 : 0x20000;
@@ -45,6 +48,9 @@ internal static partial class LinuxCalls
     [LibraryImport("libc", EntryPoint = "statx", SetLastError = true)]
     public static partial int Stat(int folder, ref byte path, int flags, uint mask, out FileStatus status);
 
+    [LibraryImport("libc", EntryPoint = "statfs", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
+    public static partial int FileSystem(string path, out FileSystemStatus status);
+
     [LibraryImport("libc", EntryPoint = "renameat2", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
     public static partial int Rename(int fromFolder, string from, int toFolder, string to, uint flags);
 
@@ -62,6 +68,10 @@ internal struct FileStatus
     private const int TypeMask = 0xF000;
     private const int RegularType = 0x8000;
     private const int FolderType = 0x4000;
+    private const uint Born = 0x800;
+
+    [FieldOffset(0)]
+    public uint Mask;
 
     [FieldOffset(28)]
     public ushort Mode;
@@ -71,6 +81,12 @@ internal struct FileStatus
 
     [FieldOffset(40)]
     public ulong Size;
+
+    [FieldOffset(80)]
+    public long BornSeconds;
+
+    [FieldOffset(88)]
+    public uint BornNanoseconds;
 
     [FieldOffset(112)]
     public long ModifiedSeconds;
@@ -90,7 +106,17 @@ internal struct FileStatus
 
     public readonly string Id => string.Create(CultureInfo.InvariantCulture, $"{DeviceMajor}.{DeviceMinor}:{Inode}");
 
+    /// <summary>With the time of birth, where the file system keeps it: the number of a deleted folder is soon given to the next.</summary>
+    public readonly string IdWithBirth => (Mask & Born) == 0 ? Id : FormattableString.Invariant($"{Id}@{BornSeconds}.{BornNanoseconds:D9}");
+
     public readonly FileStamp Stamp => new((long)Size, (ModifiedSeconds * 1000) + (ModifiedNanoseconds / 1_000_000), Id);
+}
+
+/// <summary>The beginning of <c>struct statfs</c>, with more room than any architecture needs.</summary>
+[StructLayout(LayoutKind.Sequential, Size = 512)]
+internal struct FileSystemStatus
+{
+    public nint Type;
 }
 
 /// <summary>The numbers of errno that decide something; the same on every Linux architecture.</summary>
@@ -98,11 +124,16 @@ internal static class Errno
 {
     public const int NotPermitted = 1;
     public const int NoEntry = 2;
+    public const int Interrupted = 4;
     public const int NoDevice = 6;
     public const int AccessDenied = 13;
     public const int Exists = 17;
     public const int NotAFolder = 20;
     public const int Invalid = 22;
+    public const int NoSpace = 28;
+    public const int ReadOnly = 30;
     public const int NoSystemCall = 38;
     public const int Loop = 40;
+    public const int NotSupported = 95;
+    public const int NoQuota = 122;
 }

@@ -46,7 +46,7 @@ public static class SafeFile
 
     /// <summary>
     /// The identity of a folder, null where there is none. It changes when the folder is made anew or something is mounted over it,
-    /// which sends no event.
+    /// which sends no event. A link is followed: an inbox may be named by one.
     /// </summary>
     public static string? FolderId(string path)
     {
@@ -55,7 +55,7 @@ public static class SafeFile
             return Directory.Exists(path) ? CreationText(Directory.GetCreationTimeUtc(path)) : null;
         }
 
-        return StatusOf(path) is { IsFolder: true } status ? status.Id : null;
+        return LinuxCalls.Stat(LinuxCalls.CurrentFolder, path, 0, LinuxCalls.StatsWithBirth, out var status) == 0 && status.IsFolder ? status.IdWithBirth : null;
     }
 
     private static FileStatus? StatusOf(string path) =>

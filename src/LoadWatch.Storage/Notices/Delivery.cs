@@ -42,3 +42,8 @@ public sealed record MissedDelivery(
 /// <param name="Date">The brief's date.</param>
 /// <param name="AlertPosition">The last alert change that it knew of.</param>
 public sealed record LastBrief(LocalDate Date, long AlertPosition);
+
+/// <summary>Deliveries that are still to be made.</summary>
+/// <param name="Oldest">When the notice was decided that has waited longest; null where none waits.</param>
+/// <param name="MailTriedSince">When the first of the waiting mails was tried first; null where none was tried.</param>
+public sealed record DeliveryBacklog(int Count, Instant? Oldest, Instant? MailTriedSince);

@@ -58,6 +58,11 @@ public sealed class NoticeTable
         WHERE notice = @noticeKey AND channel = @channel AND recipient = @recipient AND state = 'pending'
         """;
 
+    private const string SelectBacklog = """
+        SELECT COUNT(*) AS number, MIN(n.decided) AS oldest, MIN(CASE WHEN d.channel = 'mail' THEN d.first_attempt END) AS mail_tried_since
+        FROM delivery d JOIN notice n ON n.key = d.notice WHERE d.state = 'pending'
+        """;
+
     private readonly StoreSession session;
 
     internal NoticeTable(StoreSession session) => this.session = session;
@@ -87,6 +92,13 @@ public sealed class NoticeTable
     /// <summary>Every delivery that is still to be made, oldest notice first.</summary>
     public IReadOnlyList<PendingDelivery> PendingDeliveries() => session.Rows<NoticeRow>(SelectPending).ConvertAll(row => row.ToPending());
 
+    /// <summary>How much waits to be delivered.</summary>
+    public DeliveryBacklog Backlog()
+    {
+        var row = session.Row<BacklogRow>(SelectBacklog)!;
+        return new DeliveryBacklog(row.Number, row.Oldest, row.MailTriedSince);
+    }
+
     /// <summary>Those of them that are due, oldest notice first.</summary>
     public IReadOnlyList<PendingDelivery> DueDeliveries(Instant now) => session.Rows<NoticeRow>(SelectDue, new { now }).ConvertAll(row => row.ToPending());
 
@@ -111,4 +123,13 @@ public sealed class NoticeTable
 
     private void MarkMissed(string noticeKey, Delivery delivery, string error, DeliveryState state, Instant at, Instant? next) => session.Execute(
         Fail, new { noticeKey, channel = delivery.Channel, recipient = delivery.Recipient, error, state = Words<DeliveryState>.Of(state), at, next });
+
+    private sealed class BacklogRow
+    {
+        public int Number { get; init; }
+
+        public Instant? Oldest { get; init; }
+
+        public Instant? MailTriedSince { get; init; }
+    }
 }

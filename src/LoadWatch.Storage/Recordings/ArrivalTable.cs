@@ -22,7 +22,8 @@ public sealed class ArrivalTable
     private const string SelectInState = $"SELECT {Columns} FROM arrival WHERE state = @state ORDER BY sha";
     private const string SelectAll = $"SELECT {Columns} FROM arrival ORDER BY sha";
     private const string SelectStarting = $"SELECT {Columns} FROM arrival WHERE sha >= @digits AND sha < @beyond ORDER BY sha";
-    private const string Count = "SELECT state, COUNT(*) AS number FROM arrival GROUP BY state";
+    private const string CountAll = "SELECT state, COUNT(*) AS number FROM arrival GROUP BY state";
+    private const string CountOne = "SELECT COUNT(*) FROM arrival WHERE state = @state";
     private const string Update = "UPDATE arrival SET state = @state, kind = @kind, reason = @reason, person = @person WHERE sha = @sha";
     private const string AddAttempt = "UPDATE arrival SET attempts = attempts + 1 WHERE sha = @sha";
 
@@ -52,10 +53,13 @@ public sealed class ArrivalTable
     /// <summary>Every arrival, sorted by content.</summary>
     public IReadOnlyList<Arrival> All() => Select(SelectAll);
 
+    /// <summary>Number of arrivals in one state.</summary>
+    public int Count(ArrivalState state) => (int)session.Value<long>(CountOne, new { state = Words<ArrivalState>.Of(state) });
+
     /// <summary>Number of arrivals by state, each state named.</summary>
     public IReadOnlyDictionary<ArrivalState, int> CountByState()
     {
-        var counts = session.Rows<CountRow>(Count).ToDictionary(row => Words<ArrivalState>.Parse(row.State), row => row.Number);
+        var counts = session.Rows<CountRow>(CountAll).ToDictionary(row => Words<ArrivalState>.Parse(row.State), row => row.Number);
         return Enum.GetValues<ArrivalState>().ToDictionary(state => state, state => counts.GetValueOrDefault(state));
     }
 

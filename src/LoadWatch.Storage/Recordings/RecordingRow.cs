@@ -1,5 +1,6 @@
 using LoadWatch.Activities;
 using LoadWatch.Recordings;
+using LoadWatch.Storage.Dialects;
 using NodaTime;
 
 namespace LoadWatch.Storage.Recordings;
@@ -8,7 +9,7 @@ namespace LoadWatch.Storage.Recordings;
 internal class RecordingRow
 {
     public const string Columns =
-        "sha, part, person, start, local_offset_seconds, sport, elapsed_seconds, timer_seconds, source, channels, samples, sets, samples_digest";
+        "sha, part, person, start, local_offset_seconds, sport, elapsed_seconds, timer_seconds, source, channels, samples, sets, samples_digest, distance_metres";
 
     public string Sha { get; init; } = "";
 
@@ -28,13 +29,15 @@ internal class RecordingRow
 
     public string Source { get; init; } = "";
 
-    public int Channels { get; init; }
+    public string Channels { get; init; } = "";
 
     public int Samples { get; init; }
 
     public int Sets { get; init; }
 
     public long SamplesDigest { get; init; }
+
+    public double? DistanceMetres { get; init; }
 
     public static RecordingRow From(RecordingSummary recording) => new()
     {
@@ -47,10 +50,11 @@ internal class RecordingRow
         ElapsedSeconds = recording.ElapsedSeconds,
         TimerSeconds = recording.TimerSeconds,
         Source = recording.Source,
-        Channels = recording.Channels,
+        Channels = JsonText.Write(recording.Channels.All),
         Samples = recording.Samples,
         Sets = recording.Sets,
         SamplesDigest = recording.SamplesDigest,
+        DistanceMetres = recording.DistanceMetres,
     };
 
     public RecordingSummary ToRecording() => new(
@@ -63,8 +67,11 @@ internal class RecordingRow
         ElapsedSeconds,
         TimerSeconds,
         Source,
-        Channels,
+        new ChannelExtents(JsonText.Read<List<ChannelExtent>>(Channels)),
         Samples,
         Sets,
-        SamplesDigest);
+        SamplesDigest)
+    {
+        DistanceMetres = DistanceMetres,
+    };
 }

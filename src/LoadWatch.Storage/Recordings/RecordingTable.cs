@@ -1,4 +1,5 @@
 using LoadWatch.Activities;
+using NodaTime;
 
 namespace LoadWatch.Storage.Recordings;
 
@@ -9,10 +10,14 @@ public sealed class RecordingTable
         INSERT INTO recording ({RecordingRow.Columns})
         VALUES (
             @Sha, @Part, @Person, @Start, @LocalOffsetSeconds, @Sport, @ElapsedSeconds, @TimerSeconds,
-            @Source, @Channels, @Samples, @Sets, @SamplesDigest)
+            @Source, @Channels, @Samples, @Sets, @SamplesDigest, @DistanceMetres)
         """;
 
     private const string SelectOfPerson = $"SELECT {RecordingRow.Columns} FROM recording WHERE person = @person ORDER BY start, sha, part";
+    private const string SelectStarting = $"""
+        SELECT {RecordingRow.Columns} FROM recording WHERE person = @person AND start >= @from AND start <= @to ORDER BY start, sha, part
+        """;
+
     private const string SelectOfArrival = $"SELECT {RecordingRow.Columns} FROM recording WHERE sha = @sha ORDER BY part";
     private const string SelectAll = $"SELECT {RecordingRow.Columns} FROM recording ORDER BY person, start, sha, part";
     private const string DeleteOfArrival = "DELETE FROM recording WHERE sha = @sha";
@@ -26,6 +31,9 @@ public sealed class RecordingTable
 
     /// <summary>Sorted by start, then content and part.</summary>
     public IReadOnlyList<RecordingSummary> OfPerson(string person) => Select(SelectOfPerson, new { person });
+
+    /// <summary>A person's recordings that start in the range, both ends included, sorted by start, then content and part.</summary>
+    public IReadOnlyList<RecordingSummary> Starting(string person, Instant from, Instant to) => Select(SelectStarting, new { person, from, to });
 
     /// <summary>Sorted by part.</summary>
     public IReadOnlyList<RecordingSummary> OfArrival(string sha) => Select(SelectOfArrival, new { sha });

@@ -31,6 +31,25 @@ public sealed class SightingTable
     private const string SelectOfPath = $"SELECT {Columns} FROM sighting WHERE path = @path";
     private const string SelectOf = $"SELECT {Columns} FROM sighting WHERE sha = @sha";
 
+    private const string SelectNameSakes = """
+        SELECT DISTINCT other.sha FROM sighting own
+        JOIN sighting other ON other.inbox = own.inbox AND other.path = own.path AND other.sha <> own.sha
+        WHERE own.sha = @sha
+        """;
+
+    private const string SelectHolders = """
+        SELECT s.inbox, s.path, s.sha, s.first_seen, s.size, s.mtime, s.file_id, s.latest, s.since
+        FROM sighting s JOIN arrival a ON a.sha = s.sha
+        WHERE s.inbox = @inbox AND s.path = @path AND a.state = 'stored'
+        """;
+
+    private const string SelectNewest = "SELECT first_seen FROM sighting ORDER BY first_seen DESC LIMIT 1";
+
+    private const string SelectOldestWaiting = """
+        SELECT s.first_seen FROM arrival a JOIN sighting s ON s.sha = a.object_sha
+        WHERE a.state = 'waiting' ORDER BY s.first_seen LIMIT 1
+        """;
+
     private readonly StoreSession session;
 
     internal SightingTable(StoreSession session) => this.session = session;
@@ -72,6 +91,43 @@ public sealed class SightingTable
             .OrderBy(sighting => sighting.Path, StringComparer.Ordinal)
             .ThenBy(sighting => sighting.Inbox, StringComparer.Ordinal),
     ];
+
+    /// <summary>Every other content that was seen under a name of this one, in whatever order.</summary>
+    public IReadOnlyList<string> NameSakes(string sha) => session.Rows<string>(SelectNameSakes, new { sha });
+
+    /// <summary>
+    /// The contents that hold the names of a content now, sorted; null where it holds one itself. Only stored contents hold a name: a broken, foreign or
+    /// unjudged one corrects nothing.
+    /// </summary>
+    public IReadOnlyList<string>? Replaced(string sha)
+    {
+        var names = Of(sha);
+        if (names.Count == 0 || names.Any(name => name.Latest))
+        {
+            return null;
+        }
+
+        var holders = names.Select(HolderOf).ToList();
+        return holders.Contains(sha) ? null : [.. holders.OfType<string>().Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal)];
+    }
+
+    private string? HolderOf(Sighting name) => session.Rows<Row>(SelectHolders, new { inbox = name.Inbox, path = name.Path })
+        .Select(row => row.ToSighting())
+        .OrderByDescending(sighting => sighting.Latest)
+        .ThenByDescending(sighting => sighting.Since)
+        .ThenByDescending(sighting => sighting.Sha, StringComparer.Ordinal)
+        .FirstOrDefault()?.Sha;
+
+    /// <summary>When a name was last seen with a content that was new there; null where nothing ever came.</summary>
+    public Instant? Newest() => session.Row<MomentRow>(SelectNewest)?.FirstSeen;
+
+    /// <summary>When the arrival came that has been waiting longest; null where none waits.</summary>
+    public Instant? OldestWaiting() => session.Row<MomentRow>(SelectOldestWaiting)?.FirstSeen;
+
+    private sealed class MomentRow
+    {
+        public Instant FirstSeen { get; init; }
+    }
 
     private sealed class Row
     {

@@ -21,7 +21,7 @@ internal static class Told
     {
         var start = (date ?? Given.Date).At(new LocalTime(hour, minute));
         var summary = new RecordingSummary(
-            $"{sport}{start:MMddHHmm}", 1, "p1", start.InUtc().ToInstant(), Offset.Zero, Sport.Parse(sport), 3600, 3600, "device 1", 1, 10, sets, 0);
+            $"{sport}{start:MMddHHmm}", 1, "p1", start.InUtc().ToInstant(), Offset.Zero, Sport.Parse(sport), 3600, 3600, "device 1", ChannelExtents.None, 10, sets, 0);
         return new RecordedActivity(summary, start, new ActivityValues { Quantities = [.. quantities, Minutes(60)] });
     }
 

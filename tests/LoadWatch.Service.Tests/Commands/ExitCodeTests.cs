@@ -67,4 +67,74 @@ public sealed class ExitCodeTests : IDisposable
         Assert.True(ended.Code == 65, ended.Errors);
         Assert.DoesNotContain("   at ", ended.Errors, StringComparison.Ordinal);
     }
+
+    [Fact]
+    public void AMissingDatabaseBesideOriginalsEndsWith65AndIsNotMadeAnew()
+    {
+        folder.Put("anna/ride.fit", Some.Fit(Some.Yesterday));
+        folder.Sweep();
+        var database = Path.Combine(folder.Data, "loadwatch.db");
+        File.Delete(database);
+        var ended = Loadwatch.Run("sweep", "--config", folder.ConfigPath);
+        Assert.True(ended.Code == 65, ended.Errors);
+        Assert.Contains("from a backup", ended.Errors, StringComparison.Ordinal);
+        Assert.False(File.Exists(database));
+    }
+
+    [Fact]
+    public void ADamagedDatabaseEndsWith65AndSaysWhatToDo()
+    {
+        folder.Put("anna/ride.fit", Some.Fit(Some.Yesterday));
+        folder.Sweep();
+        var database = Path.Combine(folder.Data, "loadwatch.db");
+        var bytes = File.ReadAllBytes(database);
+        bytes.AsSpan(4096).Clear();
+        File.WriteAllBytes(database, bytes);
+        var ended = Loadwatch.Run("sweep", "--config", folder.ConfigPath);
+        Assert.True(ended.Code == 65, ended.Errors);
+        Assert.Contains("backup", ended.Errors, StringComparison.Ordinal);
+        Assert.Contains("loadwatch rebuild", ended.Errors, StringComparison.Ordinal);
+        Assert.Equal(bytes.Length, File.ReadAllBytes(database).Length);
+    }
+
+    /// <summary>The provider waits five seconds for another writer.</summary>
+    [Fact]
+    public void ADecisionWhileAnotherProgramWritesEndsWith75()
+    {
+        folder.Sweep();
+        using var other = new Microsoft.Data.Sqlite.SqliteConnection($"Data Source={Path.Combine(folder.Data, "loadwatch.db")};Pooling=False");
+        other.Open();
+        using var transaction = other.BeginTransaction(deferred: false);
+        var ended = Loadwatch.Run("ack", "anna|load_ratio||2026-06-14", "--config", folder.ConfigPath);
+        Assert.True(ended.Code == 75, ended.Errors);
+        Assert.Contains("Another program holds the database", ended.Errors, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void TheLockDiesWithItsProcess()
+    {
+        using var service = Loadwatch.Start(["run", "--config", folder.ConfigPath]);
+        Assert.True(SpinWait.SpinUntil(() => File.Exists(Path.Combine(folder.Data, "status.json")), TimeSpan.FromSeconds(60)));
+        service.Kill();
+        using var next = Workplace.OpenToWork(folder.ConfigPath);
+        Assert.NotNull(next);
+    }
+
+    [Theory]
+    [InlineData(false, "nfs", true)]
+    [InlineData(true, "nfs", false)]
+    [InlineData(false, null, false)]
+    public void ADataFolderOnANetworkFileSystemIsRefusedUnlessItIsAllowed(bool allowed, string? network, bool refused)
+    {
+        var configuration = LoadWatch.Service.Configuration.ConfigurationReader.Read(folder.ConfigPath) with { AllowNetworkDataFolder = allowed };
+        var asked = new List<string>();
+        var thrown = Record.Exception(() => RemoteData.Refuse(configuration, path =>
+        {
+            asked.Add(path);
+            return network;
+        }));
+        Assert.Equal(refused, thrown is LoadWatch.Service.Configuration.ConfigurationException);
+        Assert.All(asked, path => Assert.Equal(folder.Root, path));
+        Assert.False(Directory.Exists(folder.Data));
+    }
 }

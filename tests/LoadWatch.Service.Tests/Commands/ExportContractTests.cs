@@ -42,7 +42,7 @@ public sealed class ExportContractTests : IDisposable
     [Theory]
     [InlineData("quantities", "name,value,unit,estimated")]
     [InlineData("stimulus", "region,hard_bouts,hard_repetitions,slow_s,medium_s,large_s,grade,channel,not_seen")]
-    [InlineData("recordings", "sha256,file,part")]
+    [InlineData("recordings", "sha256,file,part,role,gives")]
     public void EveryPartOfAnActivityHasTheseKeys(string list, string keys)
     {
         var parts = Rows("activities").SelectMany(row => row.GetProperty(list).EnumerateArray()).ToList();

@@ -79,7 +79,7 @@ internal sealed class DemoLife
     {
         var anchors = new AnchorBook(demo.Anchors);
         return [.. DemoSessions.Of(demo, seed, until).Select(DemoRecording.Of).Select((recording, at) => new RecordedActivity(
-            RecordingSummaries.Of(at.ToString("x64", CultureInfo.InvariantCulture), recording, demo.Person, sourceName: null),
+            RecordingSummaries.Of(at.ToString("x64", CultureInfo.InvariantCulture), new UsableRecording(recording, Settings.UsableShareWanted), demo.Person, sourceName: null),
             LocalStart.Of(recording, demo.Person).LocalDateTime,
             ActivityComputation.Compute(recording, demo.Person, anchors, Settings)))];
     }

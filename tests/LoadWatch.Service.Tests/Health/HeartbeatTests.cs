@@ -18,8 +18,8 @@ public sealed class HeartbeatTests : ISystemdNotifier, ILogger<Watchdog>
     [Fact]
     public void AServiceThatGetsOnIsAlive()
     {
-        var heartbeat = new Heartbeat(clock, TimeSpan.FromSeconds(100));
-        using var watchdog = new Watchdog(this, heartbeat, clock, this);
+        var heartbeat = new Heartbeat("sweep", clock, TimeSpan.FromSeconds(100));
+        using var watchdog = new Watchdog(this, [heartbeat], clock, this);
         clock.Pass(100);
         watchdog.Ping();
         heartbeat.Beat();
@@ -32,14 +32,36 @@ public sealed class HeartbeatTests : ISystemdNotifier, ILogger<Watchdog>
     [Fact]
     public void AServiceThatHangsGoesSilentAndSaysSoOnce()
     {
-        var heartbeat = new Heartbeat(clock, TimeSpan.FromSeconds(100));
-        using var watchdog = new Watchdog(this, heartbeat, clock, this);
+        var heartbeat = new Heartbeat("sweep", clock, TimeSpan.FromSeconds(100));
+        using var watchdog = new Watchdog(this, [heartbeat], clock, this);
         clock.Pass(101);
         watchdog.Ping();
         watchdog.Ping();
         Assert.Empty(told);
         Assert.Equal([9903], logged);
         heartbeat.Beat();
+        watchdog.Ping();
+        Assert.Equal(["WATCHDOG=1"], told);
+    }
+
+    /// <summary>Whichever loop hangs, the others do not speak for it.</summary>
+    [Theory]
+    [InlineData(0)]
+    [InlineData(1)]
+    [InlineData(2)]
+    public void OneLoopThatHangsSilencesTheService(int hanging)
+    {
+        Heartbeat[] loops = [new SweepHeartbeat(clock, TimeSpan.FromSeconds(60)), new StatusHeartbeat(clock), new WatchHeartbeat(clock)];
+        using var watchdog = new Watchdog(this, loops, clock, this);
+        clock.Pass(3600);
+        foreach (var loop in loops.Where((_, i) => i != hanging))
+        {
+            loop.Beat();
+        }
+
+        watchdog.Ping();
+        Assert.Empty(told);
+        loops[hanging].Beat();
         watchdog.Ping();
         Assert.Equal(["WATCHDOG=1"], told);
     }
@@ -66,15 +88,4 @@ public sealed class HeartbeatTests : ISystemdNotifier, ILogger<Watchdog>
 
     void ILogger.Log<TState>(LogLevel logLevel, EventId eventId, TState state, Exception? exception, Func<TState, Exception?, string> formatter) =>
         logged.Add(eventId.Id);
-
-    private sealed class HandClock : TimeProvider
-    {
-        private long ticks;
-
-        public override long TimestampFrequency => TimeSpan.TicksPerSecond;
-
-        public override long GetTimestamp() => ticks;
-
-        public void Pass(int seconds) => ticks += seconds * TimeSpan.TicksPerSecond;
-    }
 }

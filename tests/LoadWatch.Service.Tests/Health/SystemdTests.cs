@@ -66,4 +66,24 @@ public sealed class SystemdTests : IDisposable
         Assert.SkipWhen(output.Contains("ptrace", StringComparison.OrdinalIgnoreCase), "strace may not trace here");
         Assert.True(code == 74, $"{code}: {output}");
     }
+
+    /// <summary>Also a failed sync of the archive's own folders, which the database knows nothing of.</summary>
+    [Fact]
+    public async Task AnArchiveThatIsNotKeptEndsTheService()
+    {
+        Assert.SkipUnless(OperatingSystem.IsLinux() && Tool.IsThere("strace"), "needs strace");
+        await File.AppendAllTextAsync(Path.Combine(folder.FullName, "roster.csv"), "anna,Anna Ahola,squad,1996,f,UTC\n", TestContext.Current.CancellationToken);
+        string[] loadwatch = ["dotnet", Path.Combine(AppContext.BaseDirectory, "loadwatch.dll")];
+        var (made, text) = await Tool.Run(loadwatch[0], [.. loadwatch[1..], "sweep", "--config", Config]);
+        Assert.True(made == 0, text);
+        var ride = Pipeline.Some.Fit(Pipeline.Some.Yesterday);
+        var drop = Path.Combine(folder.FullName, "inbox", "anna", "ride.fit");
+        await File.WriteAllBytesAsync(drop, ride, TestContext.Current.CancellationToken);
+        File.SetLastWriteTimeUtc(drop, DateTime.UnixEpoch);
+        var objects = Path.Combine(Data, "archive", Pipeline.WorkingFolder.Sha(ride)[..2]);
+        string[] strace = ["-f", "-qq", "-o", Path.Combine(folder.FullName, "trace"), "-P", objects, "-e", "trace=fsync", "-e", "inject=fsync:error=EIO"];
+        var (code, output) = await Tool.Run("strace", [.. strace, .. loadwatch, "run", "--config", Config]);
+        Assert.SkipWhen(output.Contains("ptrace", StringComparison.OrdinalIgnoreCase), "strace may not trace here");
+        Assert.True(code == 74, $"{code}: {output}");
+    }
 }

@@ -12,7 +12,7 @@ public sealed class BasisPartsTests
 
     private static readonly string[] WithoutRows =
     [
-        "Folder", "Hash", "Text", "DataFolder", "PagesFolder", "NoticesFolder", "Contacts", "ScanEvery", "Settle", "LargestFileBytes", "Mail",
+        "Folder", "Hash", "Text", "DataFolder", "PagesFolder", "NoticesFolder", "Contacts", "ScanEvery", "Settle", "LargestFileBytes", "Mail", "AllowNetworkDataFolder", "Administrators",
         "Subjects", // Of people, groups and devices.
     ];
 
@@ -34,7 +34,7 @@ public sealed class BasisPartsTests
 
     [Fact]
     public void OfAnInboxNameAndPatternCount() =>
-        Assert.Equal(Sorted(["Name", "FilePattern", "Path", "Take"]), Properties(typeof(Inbox)));
+        Assert.Equal(Sorted(["Name", "FilePattern", "Path", "Take", "Marker"]), Properties(typeof(Inbox)));
 
     private static IReadOnlyList<string> Properties(Type type) => Sorted(type.GetProperties().Select(property => property.Name));
 

@@ -26,6 +26,8 @@ public sealed class ActivityTableTests : StoreTest
 
         Assert.Equal(written.Winner, read.Winner);
         Assert.Equal(written.RecordingKeys, read.RecordingKeys);
+        Assert.Equal(written.Merge.Frame, read.Merge.Frame);
+        Assert.All(written.Merge.Contributions.Zip(read.Merge.Contributions), pair => Assert.True(pair.First.IsAs(pair.Second)));
         Assert.Equal(142.5, read.Values.HeartRateMeanBpm);
         Assert.Equal(181, read.Values.HeartRateMaxBpm);
         Assert.Null(read.Values.PowerMeanWatts);
@@ -89,6 +91,24 @@ public sealed class ActivityTableTests : StoreTest
     }
 
     [Fact]
+    public void HowActivitiesWereMadeIsReadByTheStartOfTheirWinners()
+    {
+        Store.Write(session =>
+        {
+            session.Activities.Put(Full());
+            session.Activities.Put(Some.Activity(2));
+        });
+
+        var (from, to) = (Some.Recording(1).Start, Some.Recording(2).Start);
+        var read = Store.Read(session => session.Activities.Merges("anna", from, to));
+
+        Assert.Equal([Full().Key, Some.Activity(2).Key], read.Select(merge => merge.Winner.Key));
+        Assert.Equal([Full().Merge.Frame, SessionFrame.Of(Some.Recording(2))], read.Select(merge => merge.Frame));
+        Assert.Single(Store.Read(session => session.Activities.Merges("anna", to, to)));
+        Assert.Empty(Store.Read(session => session.Activities.Merges("bo", from, to)));
+    }
+
+    [Fact]
     public void ARemovedActivityLeavesNothing()
     {
         Store.Write(session => session.Activities.Put(Full()));
@@ -108,7 +128,7 @@ public sealed class ActivityTableTests : StoreTest
             session.Arrivals.AddWaiting(Some.Sha(3), null, Some.Sha(3), 4);
             var late = Some.Recording(3) with { Start = Instant.FromUtc(2026, 3, 1, 20, 0) };
             session.Recordings.Add(late);
-            session.Activities.Put(new StoredActivity(late, new ActivityValues(), [late.Key]));
+            session.Activities.Put(new StoredActivity(late, new ActivityValues()));
             session.Activities.Put(Some.Activity(1));
         });
 
@@ -152,6 +172,13 @@ public sealed class ActivityTableTests : StoreTest
             ],
             Remarks = ["heart rate usable in 12 % of the time: no heart-rate load"],
         };
-        return new StoredActivity(Some.Recording(1), values, [Some.Recording(1).Key, Some.Recording(2).Key]);
+        var merge = new StoredMerge(
+            Some.Recording(1),
+            new SessionFrame(Some.Recording(1).Start - Duration.FromMilliseconds(1), 3700.5, null, new Sport("cycling"), 4, null),
+            [
+                new Contribution(Some.Recording(1).Key, ContributionRole.Wins, [new Gift(Channel.HeartRate, null, [new Stretch(null, 5), new Stretch(7, null)])]),
+                new Contribution(Some.Recording(2).Key, ContributionRole.Gives, [Gift.Of(WholeGift.Sets)]),
+            ]);
+        return new StoredActivity(merge, values);
     }
 }

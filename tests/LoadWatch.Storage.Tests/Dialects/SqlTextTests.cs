@@ -27,6 +27,11 @@ public sealed class SqlTextTests
             TextsOf(typeof(Store).Assembly.Location),
             text => text.StartsWith("BEGIN", StringComparison.Ordinal) || text.StartsWith("COMMIT", StringComparison.Ordinal));
 
+    /// <summary>A row that comes back from an INSERT would be in the caller's hands before the commit that may fail.</summary>
+    [Fact]
+    public void NoStatementGivesAValueBackBeforeItsCommit() =>
+        Assert.DoesNotContain(TextsOf(typeof(Store).Assembly.Location), text => IsSql(text) && text.Contains("RETURNING", StringComparison.OrdinalIgnoreCase));
+
     [Fact]
     public void ASecondStatementWouldBeFound()
     {

@@ -106,6 +106,26 @@ public sealed class SqliteDialectTests : IDisposable
         Assert.Equal((expected, expected), (AskOn(writer, pragma), AskOn(reader, pragma)));
     }
 
+    /// <summary>The provider's own patience counts, in seconds; the engine's would come on top.</summary>
+    [Fact]
+    public void ABusyDatabaseIsWaitedForFiveSeconds()
+    {
+        var dialect = new SqliteDialect(DatabasePath);
+        dialect.Prepare();
+
+        using var writer = dialect.OpenWriter();
+
+        Assert.Equal(5, ((SqliteConnection)writer).DefaultTimeout);
+    }
+
+    [Fact]
+    public void TheFileIsMarkedAsOursWithItsSchema()
+    {
+        new SqliteDialect(DatabasePath).Prepare();
+
+        Assert.Equal((0x4C645774, SqliteSchema.Scripts.Count), (Ask<long>("PRAGMA application_id"), Ask<long>("PRAGMA user_version")));
+    }
+
     [Theory]
     [InlineData(1034, true)]
     [InlineData(1290, true)]

@@ -93,6 +93,33 @@ public sealed class SafeFileTests : IDisposable
         Assert.Equal(FileTrouble.Denied, TroubleOf(temporary.At("ride.fit")));
     }
 
+    /// <summary>The number of a deleted folder is soon given to the next one; its time of birth is not.</summary>
+    [Fact]
+    public void AFolderMadeAnewInPlaceOfTheOldOneHasAnotherId()
+    {
+        var path = temporary.At("inbox");
+        var ids = new HashSet<string?>();
+        for (var i = 0; i < 10; i++)
+        {
+            Directory.CreateDirectory(path);
+            ids.Add(SafeFile.FolderId(path));
+            Directory.Delete(path);
+        }
+
+        Assert.Equal(10, ids.Count);
+    }
+
+    [Fact]
+    public void ASocketIsRefused()
+    {
+        Assert.SkipUnless(OperatingSystem.IsLinux(), "sockets as files are made on Linux only");
+        using var socket = new System.Net.Sockets.Socket(System.Net.Sockets.AddressFamily.Unix, System.Net.Sockets.SocketType.Stream, System.Net.Sockets.ProtocolType.Unspecified);
+        socket.Bind(new System.Net.Sockets.UnixDomainSocketEndPoint(temporary.At("socket.fit")));
+
+        Assert.Equal(FileTrouble.NotRegular, TroubleOf(temporary.At("socket.fit")));
+        Assert.Null(SafeFile.StampOf(temporary.At("socket.fit")));
+    }
+
     [Fact]
     public void AFolderMadeAnewBesideTheOldOneHasAnotherId()
     {

@@ -32,6 +32,21 @@ public sealed class RecordingTableTests(SharedFolder shared) : StoreTest(shared)
     }
 
     [Fact]
+    public void RecordingsAreFoundByTheirStartBothEndsIncluded()
+    {
+        AddRecording(1);
+        AddRecording(2);
+        AddRecording(3);
+
+        IEnumerable<int> Starting(int from, int to) => Store.Read(session => session.Recordings.Starting("anna", Some.Recording(from).Start, Some.Recording(to).Start))
+            .Select(recording => Enumerable.Range(1, 3).Single(number => Some.Recording(number).Key == recording.Key));
+
+        Assert.Equal([1, 2], Starting(1, 2));
+        Assert.Equal([3], Starting(3, 9));
+        Assert.Empty(Store.Read(session => session.Recordings.Starting("bo", Some.Recording(1).Start, Some.Recording(3).Start)));
+    }
+
+    [Fact]
     public void RemovingAnArrivalsRecordingsTakesTheActivitiesThatTheyHadWon()
     {
         AddRecording(1);
