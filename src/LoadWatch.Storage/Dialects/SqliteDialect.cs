@@ -91,7 +91,7 @@ public sealed class SqliteDialect : Dialect
         PrivateFiles.OpenOrCreate(path, FileShare.None).Dispose();
         using var copy = new SqliteConnection(new SqliteConnectionStringBuilder { DataSource = path, Mode = SqliteOpenMode.ReadWrite, Pooling = false }.ConnectionString);
         copy.Open();
-        ((SqliteConnection)connection).BackupDatabase(copy);
+        Provided(connection).BackupDatabase(copy);
     }
 
     public override IReadOnlyList<string> Check(DbConnection connection)
