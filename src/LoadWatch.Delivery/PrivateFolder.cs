@@ -2,19 +2,24 @@ using System.Runtime.InteropServices;
 
 namespace LoadWatch.Delivery;
 
-/// <summary>A folder that only its owner reads (I-12), in which names survive a power cut.</summary>
+/// <summary>A folder that only its owner reads (I-12), in which names can be made to survive a power cut.</summary>
 internal static class PrivateFolder
 {
     private const int ReadOnly = 0;
 
     /// <summary>Runs a piece of file work there; what the file system refuses becomes an outcome.</summary>
-    public static ChannelOutcome Use(string folder, Action work)
+    /// <param name="sync">Whether its names have to survive a power cut.</param>
+    public static ChannelOutcome Use(string folder, Action work, bool sync = true)
     {
         try
         {
             Create(folder);
             work();
-            Sync(folder);
+            if (sync)
+            {
+                Sync(folder);
+            }
+
             return ChannelOutcome.Delivered;
         }
         catch (UnauthorizedAccessException refused)

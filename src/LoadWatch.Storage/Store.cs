@@ -66,7 +66,7 @@ public sealed class Store : IDisposable
             try
             {
                 using var transaction = dialect.BeginWrite(Writer);
-                var result = work(new StoreSession(dialect, transaction, CountRows));
+                var result = work(new StoreSession(dialect, Writer, transaction, CountRows));
                 file.Check();
                 transaction.Commit();
                 file.NoteLog();
@@ -91,7 +91,7 @@ public sealed class Store : IDisposable
         try
         {
             using var transaction = dialect.BeginRead(reader);
-            return work(new StoreSession(dialect, transaction, CountRows));
+            return work(new StoreSession(dialect, reader, transaction, CountRows));
         }
         finally
         {

@@ -20,15 +20,17 @@ namespace LoadWatch.Storage;
 /// <summary>The tables within one transaction. Not to be kept beyond it.</summary>
 public sealed class StoreSession
 {
+    private readonly DbConnection connection;
     private readonly DbTransaction transaction;
     private readonly Action<int>? rowsRead;
 
     static StoreSession() => ColumnTypes.Register();
 
-    internal StoreSession(Dialect dialect, DbTransaction transaction, Action<int>? rowsRead = null)
+    internal StoreSession(Dialect dialect, DbConnection connection, DbTransaction transaction, Action<int>? rowsRead = null)
     {
         this.rowsRead = rowsRead;
         Dialect = dialect;
+        this.connection = connection;
         this.transaction = transaction;
         Arrivals = new ArrivalTable(this);
         Sightings = new SightingTable(this);
@@ -44,9 +46,11 @@ public sealed class StoreSession
         TableVersions = new TableVersionTable(this);
         Questions = new QuestionTable(this);
         Recomputations = new RecomputationTable(this);
+        Outdated = new OutdatedTable(this);
         People = new PersonStateTable(this);
         Configurations = new ConfigurationTable(this);
         Derived = new DerivedRows(this);
+        Basis = new BasisTable(this);
         Audits = new AuditTable(this);
         InboxRoots = new InboxRootTable(this);
         Troubles = new TroubleTable(this);
@@ -81,11 +85,15 @@ public sealed class StoreSession
 
     public RecomputationTable Recomputations { get; }
 
+    public OutdatedTable Outdated { get; }
+
     public PersonStateTable People { get; }
 
     public ConfigurationTable Configurations { get; }
 
     public DerivedRows Derived { get; }
+
+    public BasisTable Basis { get; }
 
     public AuditTable Audits { get; }
 
@@ -103,6 +111,19 @@ public sealed class StoreSession
         var rows = Connection.Query<T>(sql, values, transaction).AsList();
         rowsRead?.Invoke(rows.Count);
         return rows;
+    }
+
+    /// <summary>Goes through the rows one by one, column by column: for results of which nobody wants objects.</summary>
+    internal void EachRow(string sql, object? values, Action<DbDataReader> row)
+    {
+        using var reader = (DbDataReader)Connection.ExecuteReader(sql, values, transaction);
+        var rows = 0;
+        for (; reader.Read(); rows++)
+        {
+            row(reader);
+        }
+
+        rowsRead?.Invoke(rows);
     }
 
     /// <summary>The only row, or null.</summary>
@@ -127,5 +148,5 @@ public sealed class StoreSession
         where T : class =>
         Connection.Execute(sql, rows, transaction);
 
-    private DbConnection Connection => transaction.Connection ?? throw new InvalidOperationException("the transaction of this session is over");
+    private DbConnection Connection => transaction.Connection is null ? throw new InvalidOperationException("the transaction of this session is over") : connection;
 }

@@ -26,6 +26,9 @@ public sealed class AnchorBook
     /// <summary>This book and more anchors.</summary>
     public AnchorBook With(IEnumerable<Anchor> more) => new([.. all, .. more]);
 
+    /// <summary>Every anchor of a person, in no order.</summary>
+    public IEnumerable<Anchor> Of(string person) => all.Where(anchor => anchor.Person == person);
+
     /// <summary>
     /// The anchor that holds on <paramref name="date"/>, or null: measured before observed before estimated, then the latest, an undated
     /// one last. A machine's own anchors go before those without a machine; those of other machines never count.

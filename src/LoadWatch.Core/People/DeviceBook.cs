@@ -25,6 +25,9 @@ public sealed class DeviceBook(IEnumerable<DeviceAssignment> assignments)
 {
     private readonly ILookup<string, DeviceAssignment> bySerial = assignments.ToLookup(one => one.Serial, StringComparer.OrdinalIgnoreCase);
 
+    /// <summary>Every assignment, in the order of its file.</summary>
+    public IReadOnlyList<DeviceAssignment> All { get; } = [.. assignments];
+
     public static DeviceBook Empty { get; } = new([]);
 
     /// <summary>Id of the one who had the device, or null where nobody had, or where only the session's number would tell.</summary>

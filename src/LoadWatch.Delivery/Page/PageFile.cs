@@ -7,7 +7,8 @@ namespace LoadWatch.Delivery.Page;
 
 /// <summary>
 /// The page on disk: <c>ada.html</c> is always the newest, <c>ada-2026-03-01.html</c> the one of a decided notice. A reader meets the old page or the new
-/// one, never half of one: it is written aside, flushed to the disk and renamed.
+/// one, never half of one: it is written aside and renamed. Only the page of a notice is flushed to the disk, since it counts as delivered; the newest one is
+/// written again by the next sweep that follows a power cut.
 /// </summary>
 public sealed class PageFile(string folder) : INoticeChannel
 {
@@ -24,17 +25,17 @@ public sealed class PageFile(string folder) : INoticeChannel
 
         return PrivateFolder.Use(folder, () =>
         {
-            Replace(Path.Combine(folder, DatedName(notice.ContactId, notice.Date)), notice.Html);
+            Replace(Path.Combine(folder, DatedName(notice.ContactId, notice.Date)), notice.Html, flush: true);
             if (!HasLater(folder, notice))
             {
-                Replace(Path.Combine(folder, notice.ContactId + ".html"), notice.Html);
+                Replace(Path.Combine(folder, notice.ContactId + ".html"), notice.Html, flush: false);
             }
         });
     }
 
     /// <summary>Rewrites a contact's newest page.</summary>
     public static ChannelOutcome Write(string folder, string contactId, string html) => IsFileName(contactId)
-        ? PrivateFolder.Use(folder, () => Replace(Path.Combine(folder, contactId + ".html"), html))
+        ? PrivateFolder.Use(folder, () => Replace(Path.Combine(folder, contactId + ".html"), html, flush: false), sync: false)
         : NoFileName;
 
     private static ChannelOutcome NoFileName => ChannelOutcome.Failed(
@@ -48,14 +49,14 @@ public sealed class PageFile(string folder) : INoticeChannel
         .EnumerateFiles(folder, $"{notice.ContactId}-????-??-??.html")
         .Any(path => string.CompareOrdinal(Path.GetFileName(path), DatedName(notice.ContactId, notice.Date)) > 0);
 
-    private static void Replace(string path, string html)
+    private static void Replace(string path, string html, bool flush)
     {
         var aside = path + ".part";
         File.Delete(aside);
         using (var file = new FileStream(aside, PrivateFolder.Options(FileMode.CreateNew, FileAccess.Write)))
         {
             file.Write(Encoding.UTF8.GetBytes(html));
-            file.Flush(flushToDisk: true);
+            file.Flush(flushToDisk: flush);
         }
 
         File.Move(aside, path, overwrite: true);

@@ -6,24 +6,29 @@ using LoadWatch.Storage.Recordings;
 
 namespace LoadWatch.Service.Arrivals;
 
-/// <summary>Reads contents of known arrivals back from the archive.</summary>
+/// <summary>Reads contents of known arrivals back from the archive, each original once: it is hashed as it is read.</summary>
 public sealed class ArchiveReader(Store store, Archive archive, DecoderSet decoders)
 {
-    /// <summary>The content of an archive object and of everything inside it, for each name under which the object was seen.</summary>
-    public IEnumerable<SeenContent> Sighted(string objectSha) =>
-        SightingsOf(objectSha).SelectMany(sighting => Expand(objectSha, sighting)
-            .Select(content => new SeenContent(content, new Origin(sighting.Inbox, sighting.FirstSeen, sighting.Stamp))));
+    /// <summary>
+    /// The content of an archive object and of everything inside it, for each name under which the object was seen; null where the original is missing or
+    /// damaged.
+    /// </summary>
+    public IEnumerable<SeenContent>? Sighted(string objectSha) => archive.ReadWhole(objectSha) is { } bytes
+        ? SightingsOf(objectSha).SelectMany(sighting => Expand(objectSha, sighting, bytes)
+            .Select(content => new SeenContent(content, new Origin(sighting.Inbox, sighting.FirstSeen, sighting.Stamp))))
+        : null;
 
-    /// <summary>The content of an archive object and of the arrivals inside it that are kept nowhere else.</summary>
-    public IEnumerable<SeenContent> Kept(string objectSha) =>
-        Expand(objectSha, SightingsOf(objectSha)[0])
+    /// <summary>The content of an archive object and of the arrivals inside it that are kept nowhere else; null where the original is missing or damaged.</summary>
+    public IEnumerable<SeenContent>? Kept(string objectSha) => archive.ReadWhole(objectSha) is { } bytes
+        ? Expand(objectSha, SightingsOf(objectSha)[0], bytes)
             .Where(content => KeptIn(content.Sha) is not { } kept || kept == objectSha)
-            .Select(content => new SeenContent(content, null));
+            .Select(content => new SeenContent(content, null))
+        : null;
 
     private IReadOnlyList<Sighting> SightingsOf(string sha) => store.Read(session => session.Sightings.Of(sha));
 
-    private IEnumerable<ArrivalContent> Expand(string objectSha, Sighting sighting) =>
-        ArrivalContent.Expand(decoders, objectSha, sighting.Path, archive.Read(objectSha));
+    private IEnumerable<ArrivalContent> Expand(string objectSha, Sighting sighting, byte[] bytes) =>
+        ArrivalContent.Expand(decoders, objectSha, sighting.Path, bytes);
 
     private string? KeptIn(string sha) => store.Read(session => session.Arrivals.Get(sha))?.ObjectSha;
 }

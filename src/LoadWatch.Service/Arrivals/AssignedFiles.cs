@@ -4,7 +4,6 @@ using LoadWatch.Recordings;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
-using LoadWatch.Storage.Archives;
 using LoadWatch.Storage.Recordings;
 
 namespace LoadWatch.Service.Arrivals;
@@ -14,7 +13,7 @@ namespace LoadWatch.Service.Arrivals;
 /// anew. One that is held for another reason, its date, is looked at again by every sweep. So are decisions that were withdrawn and still show.
 /// </summary>
 public sealed class AssignedFiles(
-    WorkingConfiguration configuration, Store store, Archive archive, ArchiveReader reader, Settlement settlement, SweepReport report)
+    WorkingConfiguration configuration, Store store, ArchiveReader reader, Settlement settlement, SweepReport report)
 {
     /// <summary>Why a content is held whose owner by decision has left.</summary>
     public static string NotInTheRoster(string person) => $"assigned to {person}, who is not in the roster";
@@ -24,9 +23,9 @@ public sealed class AssignedFiles(
         foreach (var kept in store.Read(Waiting).GroupBy(arrival => arrival.ObjectSha, StringComparer.Ordinal))
         {
             cancel.ThrowIfCancellationRequested();
-            if (archive.Verify(kept.Key))
+            if (reader.Kept(kept.Key) is { } contents)
             {
-                Settle(kept.Key, kept.Select(arrival => arrival.Sha).ToHashSet(StringComparer.Ordinal));
+                Settle(contents, kept.Select(arrival => arrival.Sha).ToHashSet(StringComparer.Ordinal));
             }
             else
             {
@@ -72,9 +71,9 @@ public sealed class AssignedFiles(
     private bool OwnsDevice(RecordingSummary recording, string person) =>
         configuration.Devices.On(recording.Source[(recording.Source.LastIndexOfAny([' ', '/']) + 1)..], recording.Date, session: null) == person;
 
-    private void Settle(string objectSha, HashSet<string> shas)
+    private void Settle(IEnumerable<SeenContent> contents, HashSet<string> shas)
     {
-        foreach (var piece in reader.Kept(objectSha).Where(seen => shas.Contains(seen.Content.Sha)).InPieces())
+        foreach (var piece in contents.Where(seen => shas.Contains(seen.Content.Sha)).InPieces())
         {
             settlement.Settle(piece, force: true);
         }

@@ -12,16 +12,20 @@ public sealed class FilePattern
     private readonly Regex before;
     private readonly Regex after;
 
-    private FilePattern(string before, string after)
+    private FilePattern(string text, string before, string after)
     {
+        Text = text;
         this.before = Glob(before);
         this.after = Glob(after);
     }
 
+    /// <summary>As it was written.</summary>
+    public string Text { get; }
+
     /// <summary>Null where the text does not hold <c>{person}</c> exactly once, or holds a folder.</summary>
     public static FilePattern? Parse(string text) =>
         text.Split(Slot) is [var before, var after] && !text.Contains('/', StringComparison.Ordinal) && !text.Contains('\\', StringComparison.Ordinal)
-            ? new FilePattern(before, after)
+            ? new FilePattern(text, before, after)
             : null;
 
     /// <summary>

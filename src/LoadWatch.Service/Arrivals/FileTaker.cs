@@ -1,20 +1,17 @@
 using LoadWatch.Decoding;
 using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
-using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage.Archives;
 using LoadWatch.Storage.Files;
 using NodaTime;
 
 namespace LoadWatch.Service.Arrivals;
 
-/// <summary>Reads one file whole into the archive's staging, or says why not yet.</summary>
-public sealed class FileTaker(WorkingConfiguration configuration, Archive archive, DecoderSet decoders, Instant now, SweepReport report)
+/// <summary>Reads one file whole into the archive's staging, or says why not yet. Safe to use from several threads.</summary>
+public sealed class FileTaker(WorkingConfiguration configuration, Archive archive, DecoderSet decoders, Instant now)
 {
-    /// <summary>The file with a durable copy of its bytes, or null when it is left for a later sweep; the report says why.</summary>
-    public TakenFile? Take(FoundFile file)
+    public Taking Take(FoundFile file)
     {
-        report.Advanced();
         switch (SafeFile.Open(file.FullPath))
         {
             case OpenedFile opened:
@@ -24,14 +21,13 @@ public sealed class FileTaker(WorkingConfiguration configuration, Archive archiv
                 }
 
             case UnopenedFile { Trouble: not FileTrouble.Missing } unopened:
-                report.Unreadable.Add(new BriefLine(file.Path, unopened.Reason));
-                return null;
+                return Unreadable(file, unopened.Reason);
             default:
-                return null; // Gone since it was listed.
+                return new Taking.Gone(); // Since it was listed.
         }
     }
 
-    private TakenFile? TakeReadable(FoundFile file, OpenedFile opened)
+    private Taking TakeReadable(FoundFile file, OpenedFile opened)
     {
         try
         {
@@ -39,24 +35,21 @@ public sealed class FileTaker(WorkingConfiguration configuration, Archive archiv
         }
         catch (SourceUnreadableException e)
         {
-            report.Unreadable.Add(new BriefLine(file.Path, e.Message));
-            return null;
+            return Unreadable(file, e.Message);
         }
     }
 
-    private TakenFile? Take(FoundFile file, OpenedFile opened)
+    private Taking Take(FoundFile file, OpenedFile opened)
     {
         if (opened.Stamp.Size > configuration.LargestFileBytes)
         {
-            report.Unreadable.Add(new BriefLine(file.Path, $"larger than {configuration.LargestFileBytes / (1024 * 1024)} MB"));
-            return null;
+            return Unreadable(file, $"larger than {configuration.LargestFileBytes / (1024 * 1024)} MB");
         }
 
         var settled = SettledFiles.IsSettled(opened.Stamp, now, configuration.Settle);
         if (!settled && !ShowsItsEnd(opened.Stream))
         {
-            report.Settling++;
-            return null;
+            return new Taking.Settling();
         }
 
         switch (archive.Stage(opened.Stream, configuration.LargestFileBytes))
@@ -64,19 +57,18 @@ public sealed class FileTaker(WorkingConfiguration configuration, Archive archiv
             case StagedCopy copy when SafeFile.StampOf(file.FullPath) != opened.Stamp:
                 // Written to while it was read: the next sweep reads what it has become.
                 Archive.Discard(copy);
-                report.Settling++;
-                return null;
+                return new Taking.Settling();
             case StagedCopy copy when !settled && decoders.CheckCompleteness(copy.Bytes) != Completeness.Complete:
                 Archive.Discard(copy);
-                report.Settling++;
-                return null;
+                return new Taking.Settling();
             case StagedCopy copy:
-                return new TakenFile(file, opened.Stamp, copy);
+                return new Taking.Taken(new TakenFile(file, opened.Stamp, copy));
             default:
-                report.Settling++; // It grew past the limit while it was read.
-                return null;
+                return new Taking.Settling(); // It grew past the limit while it was read.
         }
     }
+
+    private static Taking.Unreadable Unreadable(FoundFile file, string reason) => new(new BriefLine(file.Path, reason));
 
     /// <summary>FIT, gzip and zip show by their content whether they are whole; text never does.</summary>
     private static bool ShowsItsEnd(FileStream stream)

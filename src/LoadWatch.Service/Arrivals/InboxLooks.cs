@@ -3,7 +3,6 @@ using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Files;
 using LoadWatch.Storage.Inboxes;
-using LoadWatch.Storage.Recordings;
 
 namespace LoadWatch.Service.Arrivals;
 
@@ -24,14 +23,15 @@ public sealed class InboxLooks(TimeSpan patience)
     /// <summary>The folder of an inbox as the last look found it; null where the inbox is not available.</summary>
     public InboxRoot? RootOf(string inbox) => roots.GetValueOrDefault(inbox);
 
+    /// <param name="known">Files that were taken as they stand now.</param>
     /// <param name="advanced">Called while the looks get on.</param>
     /// <returns>One look an inbox, in their order.</returns>
-    public IReadOnlyList<InboxLook> Run(WorkingConfiguration configuration, Store store, Action advanced)
+    public IReadOnlyList<InboxLook> Run(WorkingConfiguration configuration, Store store, KnownFiles known, Action advanced)
     {
         var inboxes = configuration.Inboxes.ToDictionary(inbox => inbox.Name, StringComparer.Ordinal);
         var looks = guard.Run(
             [.. inboxes.Keys],
-            (name, progress) => Look(inboxes[name], configuration, store, progress),
+            (name, progress) => Look(inboxes[name], configuration, store, known, progress),
             advanced);
         return [.. configuration.Inboxes.Zip(looks).Select(pair => Noted(pair.Second ?? InboxLook.NotAvailable(pair.First, "it does not answer: its share or disk hangs")))];
     }
@@ -50,9 +50,10 @@ public sealed class InboxLooks(TimeSpan patience)
         return look;
     }
 
-    private static InboxLook Look(Inbox inbox, WorkingConfiguration configuration, Store store, Action progress)
+    private static InboxLook Look(Inbox inbox, WorkingConfiguration configuration, Store store, KnownFiles files, Action progress)
     {
-        var (before, known) = store.Read(session => (session.InboxRoots.Of(inbox.Name), session.Sightings.Latest(inbox.Name)));
+        var before = store.Read(session => session.InboxRoots.Of(inbox.Name));
+        var known = files.Of(inbox.Name, store);
         try
         {
             if (AwayNow(inbox, before, known, progress) is { } reason)
@@ -74,7 +75,7 @@ public sealed class InboxLooks(TimeSpan patience)
         }
     }
 
-    private static string? AwayNow(Inbox inbox, InboxRoot? before, IReadOnlyDictionary<string, Sighting> known, Action progress)
+    private static string? AwayNow(Inbox inbox, InboxRoot? before, KnownInbox known, Action progress)
     {
         if (RootNow(inbox) is not { } root)
         {
@@ -84,7 +85,7 @@ public sealed class InboxLooks(TimeSpan patience)
         progress();
         return inbox.Marker is { } marker && !Path.Exists(Path.Combine(inbox.Path, marker))
             ? $"its marker \"{marker}\" is not in it: is its share mounted?"
-            : InboxDoubt.Of(inbox, before, root.FolderId, !root.HeldEntries, () => InboxScan.List(inbox) is not { Count: > 0 }, known.Count > 0);
+            : InboxDoubt.Of(inbox, before, root.FolderId, !root.HeldEntries, () => !InboxScan.HoldsFiles(inbox), known.Count > 0);
     }
 
     private static InboxRoot? RootNow(Inbox inbox) => SafeFile.FolderId(inbox.Path) is { } id

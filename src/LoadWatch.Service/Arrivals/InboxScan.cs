@@ -1,3 +1,4 @@
+using System.IO.Enumeration;
 using LoadWatch.Service.Configuration;
 
 namespace LoadWatch.Service.Arrivals;
@@ -21,34 +22,95 @@ public static class InboxScan
         ReturnSpecialDirectories = false,
     };
 
-    /// <summary>Files in ordinal order of their paths; null when the folder itself cannot be listed.</summary>
-    public static IReadOnlyList<FoundFile>? List(Inbox inbox)
+    /// <summary>Looks at each file, in the order in which the system lists them; false when the folder itself cannot be listed.</summary>
+    /// <param name="each">Gets the path below the inbox, <c>/</c> between folders, and the absolute one. They are gone with the call: a folder may hold a
+    /// million files that nothing has to be kept of.</param>
+    public static bool TryEach(Inbox inbox, SeenPath each)
     {
         try
         {
             if (!Directory.Exists(inbox.Path))
             {
-                return null;
+                return false;
             }
 
-            return Directory.EnumerateFiles(inbox.Path, "*", Options)
-                .Select(full => new FoundFile(inbox, Path.GetRelativePath(inbox.Path, full).Replace('\\', '/'), full))
-                .Where(file => IsFinished(file.Path))
-                .OrderBy(file => file.Path, StringComparer.Ordinal)
-                .ToList();
+            using var files = new Walk(Path.TrimEndingDirectorySeparator(inbox.Path), each);
+            while (files.MoveNext())
+            {
+            }
+
+            return true;
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException)
         {
-            return null;
+            return false;
         }
     }
 
-    /// <summary>False for hidden files and folders, lock files of office programs and names of copies under way.</summary>
-    public static bool IsFinished(string path)
+    /// <summary>Whether any file is in it; false also when the folder itself cannot be listed.</summary>
+    public static bool HoldsFiles(Inbox inbox)
     {
-        var name = path[(path.LastIndexOf('/') + 1)..];
-        return !path.Split('/').Any(part => part.StartsWith('.'))
-            && !name.StartsWith("~$", StringComparison.Ordinal)
-            && !Unfinished.Any(ending => name.EndsWith(ending, StringComparison.OrdinalIgnoreCase));
+        var holds = false;
+        return TryEach(inbox, (_, _) => holds = true) && holds;
+    }
+
+    /// <summary>False for hidden files, lock files of office programs and names of copies under way.</summary>
+    public static bool IsFinished(ReadOnlySpan<char> name)
+    {
+        foreach (var ending in Unfinished)
+        {
+            if (name.EndsWith(ending, StringComparison.OrdinalIgnoreCase))
+            {
+                return false;
+            }
+        }
+
+        return !name.StartsWith(".") && !name.StartsWith("~$");
+    }
+
+    /// <summary>Everything happens while it walks; it lists nothing.</summary>
+    private sealed class Walk(string root, SeenPath each) : FileSystemEnumerator<bool>(root, Options)
+    {
+        private char[] path = new char[1024];
+
+        protected override bool ShouldIncludeEntry(ref FileSystemEntry entry)
+        {
+            if (!entry.IsDirectory && IsFinished(entry.FileName))
+            {
+                Look(ref entry);
+            }
+
+            return false;
+        }
+
+        protected override bool ShouldRecurseIntoEntry(ref FileSystemEntry entry) => !entry.FileName.StartsWith(".");
+
+        protected override bool TransformEntry(ref FileSystemEntry entry) => false;
+
+        /// <summary>The full path is written once; the path below the inbox is its end.</summary>
+        private void Look(ref FileSystemEntry entry)
+        {
+            var length = entry.Directory.Length + 1 + entry.FileName.Length;
+            if (path.Length < length)
+            {
+                path = new char[2 * length];
+            }
+
+            entry.Directory.CopyTo(path);
+            path[entry.Directory.Length] = Path.DirectorySeparatorChar;
+            entry.FileName.CopyTo(path.AsSpan(entry.Directory.Length + 1));
+            var full = path.AsSpan(0, length);
+            ReadOnlySpan<char> below = full[(entry.RootDirectory.Length + (Path.EndsInDirectorySeparator(entry.RootDirectory) ? 0 : 1))..];
+            if (Path.DirectorySeparatorChar == '\\')
+            {
+                below = below.ToString().Replace('\\', '/');
+            }
+
+            each(below, full);
+        }
     }
 }
+
+/// <param name="path">Below the inbox, <c>/</c> between folders.</param>
+/// <param name="fullPath">Absolute.</param>
+public delegate void SeenPath(ReadOnlySpan<char> path, ReadOnlySpan<char> fullPath);

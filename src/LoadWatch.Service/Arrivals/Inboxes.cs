@@ -2,7 +2,6 @@ using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Files;
-using LoadWatch.Storage.Recordings;
 using NodaTime;
 
 namespace LoadWatch.Service.Arrivals;
@@ -10,11 +9,13 @@ namespace LoadWatch.Service.Arrivals;
 /// <summary>Finds the files that a sweep has to look into: all that are new or whose stamp differs from the one they were taken with, and all that are still to go.</summary>
 public static class Inboxes
 {
-    /// <summary>Changed files in the order of the inboxes and their paths. Inboxes that are not available are reported, and nothing of them is forgotten.</summary>
+    /// <summary>
+    /// Changed files in the order of the inboxes and, within each, of their paths. Inboxes that are not available are reported, and nothing of them is forgotten.
+    /// </summary>
     public static IReadOnlyList<(FoundFile File, FileStamp Stamp)> Changed(
-        WorkingConfiguration configuration, Store store, InboxLooks looks, Instant now, SweepReport report)
+        WorkingConfiguration configuration, Store store, InboxLooks looks, KnownFiles known, Instant now, SweepReport report)
     {
-        var found = looks.Run(configuration, store, report.Advanced);
+        var found = looks.Run(configuration, store, known, report.Advanced);
         report.Take(found);
         Remember(store, found, now);
         return [.. found.SelectMany(look => look.Changed)];
@@ -23,33 +24,35 @@ public static class Inboxes
     /// <summary>Lists one inbox. Runs on a thread of its own, since it may never return.</summary>
     /// <param name="progress">Called for every file.</param>
     /// <returns>Null when the folder cannot be listed.</returns>
-    public static InboxLook? Look(Inbox inbox, IReadOnlyDictionary<string, Sighting> known, Action progress)
+    public static InboxLook? Look(Inbox inbox, KnownInbox known, Action progress)
     {
-        if (InboxScan.List(inbox) is not { } listed)
-        {
-            return null;
-        }
-
-        var changed = new List<(FoundFile, FileStamp)>();
+        var seen = 0;
+        var changed = new List<(FoundFile File, FileStamp Stamp)>();
         var unreadable = new List<string>();
-        var files = listed.Where(file => file.Path != inbox.Marker).ToList();
-        foreach (var file in files)
+        var isListed = InboxScan.TryEach(inbox, (path, fullPath) =>
         {
             progress();
-            var stamp = SafeFile.StampOf(file.FullPath);
-            if (stamp is not null && (IsToGo(inbox) || !IsTaken(known, file, stamp)))
+            if (path.SequenceEqual(inbox.Marker))
             {
-                changed.Add((file, stamp));
+                return;
+            }
+
+            seen++;
+            var stamp = SafeFile.StampOf(fullPath);
+            if (stamp is not null && (IsToGo(inbox) || !known.Has(path, stamp)))
+            {
+                changed.Add((new FoundFile(inbox, path.ToString(), fullPath.ToString()), stamp));
             }
 
             // No stamp: gone again, or a pipe or link that intake never takes, or a name whose bytes were lost on the way into a string.
-            if (stamp is null && UnreadableNames.IsOne(file.Path))
+            if (stamp is null && UnreadableNames.IsOne(path))
             {
-                unreadable.Add(file.Path);
+                unreadable.Add(path.ToString());
             }
-        }
-
-        return new InboxLook(inbox, null, null, files.Count, changed, [.. unreadable, .. UnreadableNames.OfFolders(inbox)]);
+        });
+        return isListed
+            ? new InboxLook(inbox, null, null, seen, [.. changed.OrderBy(found => found.File.Path, StringComparer.Ordinal)], [.. unreadable.Order(StringComparer.Ordinal), .. UnreadableNames.OfFolders(inbox)])
+            : null;
     }
 
     /// <summary>Which folder each inbox is; written only where that changed.</summary>
@@ -117,7 +120,4 @@ public static class Inboxes
 
     /// <summary>What still stands in such an inbox is taken again, known or not: the process may have ended between its effects and its removal.</summary>
     private static bool IsToGo(Inbox inbox) => inbox.Take == TakeMode.Move;
-
-    private static bool IsTaken(IReadOnlyDictionary<string, Sighting> known, FoundFile file, FileStamp stamp) =>
-        known.TryGetValue(file.Path, out var last) && last.Stamp == stamp;
 }

@@ -2,7 +2,6 @@ using LoadWatch.Recordings;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
-using LoadWatch.Storage.Archives;
 using LoadWatch.Storage.Recordings;
 using NodaTime;
 
@@ -13,18 +12,19 @@ namespace LoadWatch.Service.Arrivals;
 /// as long as another name of the same content is still there.
 /// </summary>
 public sealed class MovedFiles(
-    WorkingConfiguration configuration, Store store, Archive archive, ArchiveReader reader, Settlement settlement, Instant now, SweepReport report)
+    WorkingConfiguration configuration, Store store, ArchiveReader reader, Settlement settlement, KnownFiles known, Instant now, SweepReport report)
 {
     public void TakeUp()
     {
         foreach (var arrival in store.Read(session => session.Arrivals.InState(ArrivalState.Held)))
         {
             var names = store.Read(session => session.Sightings.Of(arrival.Sha)).ToLookup(IsThere);
-            if (names[true].Any() && names[false].Any() && archive.Verify(arrival.ObjectSha))
+            if (names[true].Any() && names[false].Any() && reader.Kept(arrival.ObjectSha) is { } kept)
             {
                 var gone = names[false].ToList();
-                var content = reader.Kept(arrival.ObjectSha).Where(seen => seen.Content.Sha == arrival.Sha).ToList();
+                var content = kept.Where(seen => seen.Content.Sha == arrival.Sha).ToList();
                 settlement.Settle(content, force: true, gone, session => Forget(session, arrival, gone));
+                gone.ForEach(sighting => known.Forget(sighting.Inbox, sighting.Path));
             }
         }
     }

@@ -13,7 +13,7 @@ public static class UnreadableNames
 {
     private const char Lost = '\uFFFD';
 
-    public static bool IsOne(string path) => path.Contains(Lost, StringComparison.Ordinal);
+    public static bool IsOne(ReadOnlySpan<char> path) => path.Contains(Lost);
 
     /// <summary>Folders of such names, which the scan cannot go into.</summary>
     public static IReadOnlyList<string> OfFolders(Inbox inbox) => OperatingSystem.IsLinux()

@@ -3,13 +3,13 @@ using Spectre.Console;
 
 namespace LoadWatch.Service.Commands;
 
-/// <summary><c>loadwatch rebuild</c>: drop what is derived and compute it again from the archive.</summary>
+/// <summary><c>loadwatch rebuild</c>: compute everything derived again from the archive. One that was stopped goes on where it was.</summary>
 public static class RebuildCommand
 {
     public static Command Create()
     {
         var config = CommonOptions.Config();
-        var command = new Command("rebuild", "Drop everything derived and compute it again from the archive of originals; sends nothing.") { config };
+        var command = new Command("rebuild", "Compute everything derived again from the archive of originals; sends nothing. One that was stopped goes on where it was.") { config };
         command.SetAction((parsed, cancel) => Task.FromResult(Run(parsed.GetValue(config)!, cancel)));
         return command;
     }
@@ -31,7 +31,7 @@ public static class RebuildCommand
             });
         }
 
-        Console.Out.WriteLine($"Rebuilt: {sweep.Report.Settled.Values.Sum()} arrivals, {sweep.Report.PeopleComputed} people.");
+        Console.Out.WriteLine($"Rebuilt: {sweep.Report.Recomputed} arrivals, {sweep.Report.PeopleComputed} people.");
         return ExitCode.Ok;
     }
 }

@@ -13,6 +13,7 @@ public sealed class Workplace : IDisposable
 {
     private readonly string configPath;
     private readonly InstanceLock? instance;
+    private readonly KnownFiles known = new();
     private Sweep? last;
 
     private Workplace(string configPath, WorkingConfiguration configuration, DataFolder folder, InstanceLock? instance, Store store)
@@ -84,7 +85,7 @@ public sealed class Workplace : IDisposable
     /// <summary>The next sweep. After one that did not get as far as the pages, also in an earlier process, it writes them all anew.</summary>
     public Sweep NewSweep(Instant now)
     {
-        var sweep = new Sweep(Configuration, Folder, Store, now, new ChildProcessProbe(configPath))
+        var sweep = new Sweep(Configuration, Folder, Store, now, new ChildProcessProbe(configPath), known)
         {
             PagesAreCurrent = last is { PagesAreWritten: true },
             Looks = Looks,

@@ -18,26 +18,40 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
     /// <summary>Dates through which people are computed, by person, where it is not the last date that is over for them.</summary>
     public IReadOnlyDictionary<string, LocalDate> Through { get; init; } = new Dictionary<string, LocalDate>();
 
-    public void Run(CancellationToken cancel)
+    /// <param name="last">Written in the commit of the last people, or in one of its own where nobody's days are computed: every commit waits for the disk.</param>
+    public void Run(CancellationToken cancel, Action<StoreSession>? last = null)
     {
         var basis = TableBasis.Of(configuration, store);
-        foreach (var group in Behind(basis).Chunk(PeopleInOneCommit))
+        var groups = Behind(basis).Chunk(PeopleInOneCommit).ToList();
+        foreach (var group in groups)
         {
-            Compute(group, cancel);
+            Compute(group, group == groups[^1] ? last : null, cancel);
             report.PeopleComputed += group.Length;
+        }
+
+        if (groups.Count == 0 && last is not null)
+        {
+            store.Write(last);
         }
     }
 
     /// <summary>The last date that is over for the person: the one that rules and alerts look at.</summary>
     public static LocalDate LastDateOver(Person person, Instant now) => now.InZone(person.Zone).Date.PlusDays(-1);
 
-    private void Compute(IReadOnlyList<DayRun> group, CancellationToken cancel)
+    private void Compute(IReadOnlyList<DayRun> group, Action<StoreSession>? last, CancellationToken cancel)
     {
         while (group.Any(run => !run.IsDone))
         {
             cancel.ThrowIfCancellationRequested();
             var stretches = group.Where(run => !run.IsDone).ToList().AsParallel().AsOrdered().Select(run => store.Read(run.Next)).ToList();
-            store.Write(session => stretches.ForEach(stretch => stretch.Write(session)));
+            store.Write(session =>
+            {
+                stretches.ForEach(stretch => stretch.Write(session));
+                if (group.All(run => run.IsDone))
+                {
+                    last?.Invoke(session);
+                }
+            });
             report.Advanced();
         }
     }

@@ -9,96 +9,162 @@ using NodaTime;
 namespace LoadWatch.Service.Pipeline;
 
 /// <summary>
-/// Takes changed files in, in groups that share one folder sync and two commits. The order of I-2: durable copy, rename, folder sync, commit "waiting",
-/// decode, commit of all effects, and only then the inbox.
+/// Takes changed files in, in groups that share one round of syncs and two commits. The order of I-2: durable copy, rename, folder sync, commit "waiting",
+/// decode, commit of all effects, and only then the inbox. At most three groups are under way, each at its own step: one is copied, one is decoded, one commits.
 /// </summary>
 public sealed class Intake(
-    WorkingConfiguration configuration, Store store, Archive archive, DecoderSet decoders, Settlement settlement, Instant now, SweepReport report)
+    WorkingConfiguration configuration, Store store, Archive archive, DecoderSet decoders, Settlement settlement, KnownFiles known, Instant now, SweepReport report)
 {
     private const int GroupFiles = 64;
-    private const long GroupBytes = 32L * 1024 * 1024;
+    private const long GroupBytes = 8L * 1024 * 1024;
+
+    /// <summary>Files read at once: a share answers each slowly, and many together.</summary>
+    private const int ReadTogether = 4;
 
     public void TakeIn(IReadOnlyList<(FoundFile File, FileStamp Stamp)> files, CancellationToken cancel)
     {
-        var taker = new FileTaker(configuration, archive, decoders, now, report);
-        foreach (var group in Groups(files))
+        try
         {
-            cancel.ThrowIfCancellationRequested();
-            var taken = Stage(group, taker);
-            if (taken.Count > 0)
+            foreach (var group in Waiting(files, cancel).OneAhead())
             {
-                TakeGroup(taken);
+                Settle(group);
+            }
+        }
+        finally
+        {
+            settlement.Finish();
+        }
+
+        cancel.ThrowIfCancellationRequested();
+    }
+
+    /// <summary>Groups that are durable and waiting. After a cancellation no new one begins; those begun are settled, else a restart would have to try them first.</summary>
+    private IEnumerable<WaitingGroup> Waiting(IReadOnlyList<(FoundFile File, FileStamp Stamp)> files, CancellationToken cancel)
+    {
+        var taker = new FileTaker(configuration, archive, decoders, now);
+        foreach (var group in Groups(files).TakeWhile(_ => !cancel.IsCancellationRequested))
+        {
+            if (Stage(group, taker) is { Count: > 0 } taken)
+            {
+                yield return MakeDurable(taken);
             }
         }
     }
 
     /// <summary>A failing disk ends the sweep; what was staged until then goes, since nobody else would remove it before the next start.</summary>
-    private static List<TakenFile> Stage(List<FoundFile> group, FileTaker taker)
+    private List<TakenFile> Stage(List<FoundFile> group, FileTaker taker)
     {
-        var taken = new List<TakenFile>();
+        var takings = group.AsParallel().AsOrdered().WithDegreeOfParallelism(ReadTogether).Select(file => Attempt<Taking>.Of(() => taker.Take(file))).ToList();
+        var taken = takings.Select(taking => taking.Outcome).OfType<Taking.Taken>().Select(one => one.File).ToList();
+        if (takings.Find(taking => taking.Outcome is null) is { } failed)
+        {
+            taken.ForEach(file => Archive.Discard(file.Copy));
+            failed.Throw();
+        }
+
+        foreach (var taking in takings)
+        {
+            KillPoint.Pass("staged");
+            Report(taking.Outcome!);
+        }
+
+        return taken;
+    }
+
+    private void Report(Taking taking)
+    {
+        switch (taking)
+        {
+            case Taking.Settling:
+                report.Settling++;
+                break;
+            case Taking.Unreadable unreadable:
+                report.Unreadable.Add(unreadable.Line);
+                break;
+            default:
+                break;
+        }
+
+        report.Advanced();
+    }
+
+    private WaitingGroup MakeDurable(List<TakenFile> taken)
+    {
         try
         {
-            foreach (var file in group.Select(taker.Take).OfType<TakenFile>())
-            {
-                taken.Add(file);
-                KillPoint.Pass("staged");
-            }
-
-            return taken;
+            archive.Commit(taken.ConvertAll(file => file.Copy));
         }
         catch
         {
             taken.ForEach(file => Archive.Discard(file.Copy));
             throw;
         }
-    }
 
-    private void TakeGroup(List<TakenFile> taken)
-    {
-        archive.Commit(taken.ConvertAll(file => file.Copy));
         KillPoint.Pass("archived");
-        store.Write(session => RecordWaiting(session, taken));
+        var group = store.Write(session => RecordWaiting(session, taken));
         KillPoint.Pass("waiting");
-        foreach (var piece in Contents(taken.Where(IsHarmless)).InPieces())
-        {
-            settlement.Settle(piece, force: false, gone: [], session => RecordNames(session, piece));
-        }
-
-        KillPoint.Pass("settled");
-        foreach (var file in taken.Where(file => file.File.Inbox.Take == TakeMode.Move))
-        {
-            InboxRemoval.Remove(file);
-        }
+        return group;
     }
 
-    private void RecordWaiting(StoreSession session, List<TakenFile> taken)
+    private WaitingGroup RecordWaiting(StoreSession session, List<TakenFile> taken)
     {
+        var group = new WaitingGroup(taken);
         foreach (var file in taken)
         {
+            var isNew = session.Arrivals.AddWaiting(file.Copy.Sha, null, file.Copy.Sha, file.Copy.Size);
+            var isHarmless = isNew || session.Arrivals.Get(file.Copy.Sha) is not { } arrival || !Recovery.IsPoisonous(arrival);
+            if (isHarmless)
+            {
+                group.Harmless.Add(file);
+            }
+
             // A name stands for "taken": that of a known content comes with its effects, since nothing waits for a restart to take it up.
-            if (session.Arrivals.AddWaiting(file.Copy.Sha, null, file.Copy.Sha, file.Copy.Size) || !IsHarmless(session, file))
+            if (isNew || !isHarmless)
             {
                 session.Sightings.Upsert(file.File.Inbox.Name, file.File.Path, file.Copy.Sha, now, file.Stamp);
+                group.Named.Add((file.File.Inbox.Name, file.File.Path));
             }
         }
+
+        return group;
     }
 
-    private static void RecordNames(StoreSession session, IReadOnlyList<SeenContent> piece)
+    private void Settle(WaitingGroup group)
     {
-        foreach (var (content, origin) in piece.Where(seen => seen.Content.ParentSha is null))
+        foreach (var piece in Contents(group.Harmless).InPieces())
+        {
+            settlement.Begin(piece, force: false, gone: [], session => RecordNames(session, group, piece));
+        }
+
+        settlement.Then(() => Finish(group));
+    }
+
+    private static void RecordNames(StoreSession session, WaitingGroup group, IReadOnlyList<SeenContent> piece)
+    {
+        foreach (var (content, origin) in piece.Where(seen => seen.Content.ParentSha is null && !group.Named.Contains((seen.Origin!.Inbox, seen.Content.Path))))
         {
             session.Sightings.Upsert(origin!.Inbox, content.Path, content.Sha, origin.FirstSeen, origin.Stamp);
         }
     }
 
-    private bool IsHarmless(TakenFile file) => store.Read(session => IsHarmless(session, file));
-
-    private static bool IsHarmless(StoreSession session, TakenFile file) =>
-        session.Arrivals.Get(file.Copy.Sha) is not { } known || !Recovery.IsPoisonous(known);
-
     private IEnumerable<SeenContent> Contents(IEnumerable<TakenFile> taken) =>
         taken.SelectMany(file => ArrivalContent.Expand(decoders, file.Copy.Sha, file.File.Path, file.Copy.Bytes)
             .Select(content => new SeenContent(content, new Origin(file.File.Inbox.Name, now, file.Stamp))));
+
+    /// <summary>Every effect of the group is durable.</summary>
+    private void Finish(WaitingGroup group)
+    {
+        KillPoint.Pass("settled");
+        foreach (var file in group.Taken)
+        {
+            known.Add(file.File, file.Stamp);
+            file.Copy.Dispose();
+            if (file.File.Inbox.Take == TakeMode.Move)
+            {
+                InboxRemoval.Remove(file);
+            }
+        }
+    }
 
     private static IEnumerable<List<FoundFile>> Groups(IReadOnlyList<(FoundFile File, FileStamp Stamp)> files)
     {
@@ -121,5 +187,15 @@ public sealed class Intake(
         {
             yield return group;
         }
+    }
+
+    /// <summary>Files whose copies are durable and whose contents wait for their effects.</summary>
+    private sealed record WaitingGroup(IReadOnlyList<TakenFile> Taken)
+    {
+        /// <summary>Those that this process may decode.</summary>
+        public List<TakenFile> Harmless { get; } = [];
+
+        /// <summary>Names on record already, by inbox and path.</summary>
+        public HashSet<(string Inbox, string Path)> Named { get; } = [];
     }
 }

@@ -13,14 +13,16 @@ namespace LoadWatch.Service.Pipeline;
 /// </summary>
 public sealed class Recovery(Store store, Archive archive, ArchiveReader reader, Settlement settlement, IDecodeProbe probe)
 {
-    private const int MostAttempts = 3;
+    /// <summary>Why an arrival is refused whose original is not what it was.</summary>
+    public const string Damaged = "its original in the archive is missing or damaged";
+
     private const int ProbedTogether = 64;
 
     /// <summary>Whether a waiting arrival has ended a child before: then nothing waits for it (I-14).</summary>
     public static bool IsSuspect(Arrival arrival) => arrival.Attempts > 0;
 
     /// <summary>Whether the arrival was refused because it ends the process that decodes it: no process but a child may touch it again.</summary>
-    public static bool IsPoisonous(Arrival arrival) => arrival.State == ArrivalState.Refused && arrival.Attempts >= MostAttempts;
+    public static bool IsPoisonous(Arrival arrival) => arrival.State == ArrivalState.Refused && arrival.Attempts >= ArrivalTable.MostAttempts;
 
     public void Run(CancellationToken cancel)
     {
@@ -34,22 +36,10 @@ public sealed class Recovery(Store store, Archive archive, ArchiveReader reader,
     /// <summary>One child for the whole group is enough where it lives; only where it dies is each tried alone.</summary>
     private void TakeUp(Arrival[] group)
     {
-        var whole = group.Where(IsWhole).ToList();
-        var unsuspected = whole.FindAll(arrival => !IsSuspect(arrival));
+        var unsuspected = group.Where(arrival => !IsSuspect(arrival)).ToList();
         var livedThrough = unsuspected.Count > 1 && Survives(unsuspected) ? unsuspected : [];
-        livedThrough.ForEach(Settle);
-        whole.Except(livedThrough).ToList().ForEach(TakeUp);
-    }
-
-    private bool IsWhole(Arrival arrival)
-    {
-        var isWhole = archive.Verify(arrival.ObjectSha);
-        if (!isWhole)
-        {
-            Refuse(arrival, "its original in the archive is missing or damaged");
-        }
-
-        return isWhole;
+        Settle(livedThrough);
+        group.Except(livedThrough).ToList().ForEach(TakeUp);
     }
 
     private bool Survives(List<Arrival> arrivals) =>
@@ -59,24 +49,46 @@ public sealed class Recovery(Store store, Archive archive, ArchiveReader reader,
     {
         if (Survives([arrival]))
         {
-            Settle(arrival);
+            Settle([arrival]);
+        }
+        else if (archive.Verify(arrival.ObjectSha))
+        {
+            store.Write(session => session.Arrivals.CountAttempt(arrival.Sha));
+            if (arrival.Attempts + 1 >= ArrivalTable.MostAttempts)
+            {
+                Refuse(arrival, $"poisonous: decoding ended the process or broke its limits {ArrivalTable.MostAttempts} times");
+            }
         }
         else
         {
-            store.Write(session => session.Arrivals.CountAttempt(arrival.Sha));
-            if (arrival.Attempts + 1 >= MostAttempts)
-            {
-                Refuse(arrival, $"poisonous: decoding ended the process or broke its limits {MostAttempts} times");
-            }
+            Refuse(arrival, Damaged);
         }
     }
 
-    private void Settle(Arrival arrival)
+    private void Settle(List<Arrival> arrivals)
     {
-        foreach (var piece in reader.Sighted(arrival.ObjectSha).InPieces())
+        try
         {
-            settlement.Settle(piece, force: false);
+            foreach (var piece in arrivals.SelectMany(Contents).InPieces().OneAhead())
+            {
+                settlement.Begin(piece, force: false, gone: [], _ => { });
+            }
         }
+        finally
+        {
+            settlement.Finish();
+        }
+    }
+
+    private IEnumerable<SeenContent> Contents(Arrival arrival)
+    {
+        var contents = reader.Sighted(arrival.ObjectSha);
+        if (contents is null)
+        {
+            Refuse(arrival, Damaged);
+        }
+
+        return contents ?? [];
     }
 
     private void Refuse(Arrival arrival, string reason) =>

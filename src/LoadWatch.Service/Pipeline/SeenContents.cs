@@ -4,7 +4,7 @@ namespace LoadWatch.Service.Pipeline;
 public static class SeenContents
 {
     private const int MostContents = 64;
-    private const long MostBytes = 32L * 1024 * 1024;
+    private const long MostBytes = 16L * 1024 * 1024;
 
     /// <summary>Lazily; a piece is over once it holds enough, so one content may exceed it.</summary>
     public static IEnumerable<IReadOnlyList<SeenContent>> InPieces(this IEnumerable<SeenContent> contents)

@@ -7,9 +7,15 @@ using LoadWatch.Storage.Recordings;
 
 namespace LoadWatch.Service.Pipeline;
 
-/// <summary>Decides what becomes of contents and commits all effects of a group at once: states, recordings, activities, dirty dates (I-3, I-4).</summary>
+/// <summary>
+/// Decides what becomes of contents and commits all effects of a group at once: states, recordings, activities, dirty dates (I-3, I-4). One group may be decoded
+/// while the one before it commits; groups commit in the order in which they began.
+/// </summary>
 public sealed class Settlement(WorkingConfiguration configuration, Store store, ArrivalDecoder decoder, SweepReport report)
 {
+    private Task committing = Task.CompletedTask;
+    private HashSet<string> inCommit = new(StringComparer.Ordinal);
+
     /// <param name="force">Decode and judge again even where nothing about the arrival changed.</param>
     public void Settle(IReadOnlyList<SeenContent> seen, bool force) => Settle(seen, force, [], _ => { });
 
@@ -17,6 +23,20 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
     /// <param name="alongside">Written in the same commit as the effects.</param>
     public void Settle(IReadOnlyList<SeenContent> seen, bool force, IReadOnlyList<Sighting> gone, Action<StoreSession> alongside)
     {
+        Begin(seen, force, gone, alongside);
+        Finish();
+    }
+
+    /// <summary>Decodes the contents and starts their commit; what they hold may be used until it is over.</summary>
+    /// <inheritdoc cref="Settle(IReadOnlyList{SeenContent}, bool, IReadOnlyList{Sighting}, Action{StoreSession})"/>
+    public void Begin(IReadOnlyList<SeenContent> seen, bool force, IReadOnlyList<Sighting> gone, Action<StoreSession> alongside)
+    {
+        if (seen.Any(item => inCommit.Contains(item.Content.Sha)))
+        {
+            // Who claims a content is known once its other names are committed.
+            Finish();
+        }
+
         var pending = store.Read(session => Pending(session, seen, force, gone));
         var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims, item.IsDecided)).ToList();
         var before = pending.ToDictionary(item => item.Content.Sha, item => item.Before, StringComparer.Ordinal);
@@ -25,11 +45,42 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
         var values = new SessionValues(decoder, shelf);
         new Foresight(store, shelf, values).LookAhead(decoded);
         KillPoint.Pass("decoded");
+        Finish();
+        inCommit = seen.Select(item => item.Content.Sha).ToHashSet(StringComparer.Ordinal);
+        committing = Task.Run(() => Commit(seen, decoded, before, alongside, session => new ArrivalEffects(session, shelf, values)));
+    }
+
+    /// <summary>Does something once everything that began is durable.</summary>
+    public void Then(Action afterwards)
+    {
+        var last = committing;
+        committing = Task.Run(() =>
+        {
+            last.GetAwaiter().GetResult();
+            afterwards();
+        });
+    }
+
+    /// <summary>Waits until everything that began is committed, and throws what went wrong with it.</summary>
+    public void Finish()
+    {
+        var last = committing;
+        (committing, inCommit) = (Task.CompletedTask, new HashSet<string>(StringComparer.Ordinal));
+        last.GetAwaiter().GetResult();
+    }
+
+    private void Commit(
+        IReadOnlyList<SeenContent> seen,
+        List<DecodedArrival> decoded,
+        Dictionary<string, ArrivalState?> before,
+        Action<StoreSession> alongside,
+        Func<StoreSession, ArrivalEffects> effectsIn)
+    {
         store.Write(session =>
         {
             alongside(session);
             RecordMembers(session, seen);
-            var effects = new ArrivalEffects(session, shelf, values);
+            var effects = effectsIn(session);
             decoded.ForEach(effects.Apply);
             seen.Select(item => item.Content.Sha).Distinct(StringComparer.Ordinal).ToList().ForEach(effects.TouchNames);
             effects.Finish();
@@ -42,14 +93,16 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
         report.Advanced();
     }
 
-    /// <summary>Refuses an arrival that is not to be decoded; what its names held before counts as it did before it came.</summary>
-    public void Refuse(string sha, string reason) => store.Write(session =>
+    /// <summary>Refuses an arrival that is not to be decoded; what it gave goes, and what its names held before counts as it did before it came.</summary>
+    /// <param name="alongside">Written in the same commit.</param>
+    public void Refuse(string sha, string reason, Action<StoreSession>? alongside = null) => store.Write(session =>
     {
-        session.Arrivals.Settle(sha, ArrivalState.Refused, "unknown", reason, null);
         var shelf = new RecordingShelf(decoder);
         var effects = new ArrivalEffects(session, shelf, new SessionValues(decoder, shelf));
+        effects.Apply(new DecodedArrival(sha, "unknown", new ArrivalVerdict(ArrivalState.Refused, reason, null), []));
         effects.TouchNames(sha);
         effects.Finish();
+        alongside?.Invoke(session);
     });
 
     /// <summary>Contents that are new, or whose owner is told differently now, each once.</summary>

@@ -1,10 +1,10 @@
-using LoadWatch.Activities;
 using LoadWatch.Decoding;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Archives;
+using LoadWatch.Storage.Configurations;
 using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
@@ -14,7 +14,6 @@ public sealed class Sweep
 {
     private readonly WorkingConfiguration configuration;
     private readonly Store store;
-    private readonly Archive archive;
     private readonly Instant now;
     private readonly Settlement settlement;
     private readonly Intake intake;
@@ -26,25 +25,28 @@ public sealed class Sweep
     private readonly Recomputations recomputations;
     private readonly ArrivalDecoder decoder;
     private readonly Briefs briefs;
-    private readonly ArchiveReader reader;
+    private readonly KnownFiles known;
+    private bool isNewConfiguration;
 
-    public Sweep(WorkingConfiguration configuration, DataFolder folder, Store store, Instant now, IDecodeProbe probe)
+    /// <param name="known">Kept between sweeps, it spares reading the names of all files again.</param>
+    public Sweep(WorkingConfiguration configuration, DataFolder folder, Store store, Instant now, IDecodeProbe probe, KnownFiles? known = null)
     {
         this.configuration = configuration;
         this.store = store;
         this.now = now;
-        archive = new Archive(folder);
+        this.known = known ?? new KnownFiles();
+        var archive = new Archive(folder);
         var decoders = new DecoderSet(configuration.Layouts);
         decoder = new ArrivalDecoder(configuration, decoders, archive, now);
-        reader = new ArchiveReader(store, archive, decoders);
+        var reader = new ArchiveReader(store, archive, decoders);
         settlement = new Settlement(configuration, store, decoder, Report);
-        intake = new Intake(configuration, store, archive, decoders, settlement, now, Report);
+        intake = new Intake(configuration, store, archive, decoders, settlement, this.known, now, Report);
         recovery = new Recovery(store, archive, reader, settlement, probe);
-        moved = new MovedFiles(configuration, store, archive, reader, settlement, now, Report);
+        moved = new MovedFiles(configuration, store, reader, settlement, this.known, now, Report);
         answers = new Answers(configuration, now);
-        assigned = new AssignedFiles(configuration, store, archive, reader, settlement, Report);
+        assigned = new AssignedFiles(configuration, store, reader, settlement, Report);
         tables = new Tables(configuration, store, decoder, Report);
-        recomputations = new Recomputations(store, archive, reader, settlement);
+        recomputations = new Recomputations(store, reader, settlement, Report);
         briefs = new Briefs(configuration, now, Report.Unreadable, Report.MissingInboxes);
     }
 
@@ -58,14 +60,19 @@ public sealed class Sweep
 
     public bool PagesAreWritten { get; private set; }
 
+    /// <summary>
+    /// How long a sweep goes on with contents whose basis changed; the next one goes on from there. So a changed formula over a large archive does not hold back
+    /// the morning's brief.
+    /// </summary>
+    public TimeSpan RecomputesFor { get; init; } = TimeSpan.FromMinutes(1);
+
     public SweepReport Run(CancellationToken cancel = default)
     {
-        AdoptConfiguration(cancel);
-        decoder.Basis = TableBasis.Of(configuration, store);
+        Adopt();
         recovery.Run(cancel);
-        intake.TakeIn(Inboxes.Changed(configuration, store, Looks, now, Report), cancel);
+        intake.TakeIn(Inboxes.Changed(configuration, store, Looks, known, now, Report), cancel);
         moved.TakeUp();
-        TakeUpTables(cancel);
+        Recompute(IsFromNothing ? Patience.Endless : new Patience(RecomputesFor), cancel);
         Report.Take(store.Write(answers.TakeUp));
         assigned.TakeUp(cancel);
         Evaluate(cancel);
@@ -73,98 +80,79 @@ public sealed class Sweep
         return Report;
     }
 
-    /// <summary>Drops every derived row and computes it again from the archive (I-5); sends nothing.</summary>
+    /// <summary>
+    /// Computes every derived row again from the archive (I-5); sends nothing. The rows stand until their successors come, and one that was stopped goes on
+    /// where it was.
+    /// </summary>
+    /// <param name="progress">Gets the number of originals that are through, and of all.</param>
     public SweepReport Rebuild(CancellationToken cancel, Action<int, int>? progress = null)
     {
+        Adopt();
         recovery.Run(cancel);
-        var objects = store.Read(session => session.Arrivals.All())
-            .Where(arrival => arrival.State != ArrivalState.Waiting && !Recovery.IsPoisonous(arrival))
-            .Select(arrival => arrival.ObjectSha)
-            .Distinct(StringComparer.Ordinal)
-            .ToList();
-        var through = store.Write(EmptyDerived);
-        KillPoint.Pass("emptied");
-        var done = 0;
-        foreach (var piece in objects.SelectMany(sha => Kept(sha, () => progress?.Invoke(++done, objects.Count))).InPieces())
+        var (through, all) = store.Write(session =>
         {
-            cancel.ThrowIfCancellationRequested();
-            settlement.Settle(piece, force: true);
-        }
+            if (session.Derived.Rebuild() == RebuildState.None)
+            {
+                new Adoption(configuration, session).AskForAll(RebuildState.OverRows);
+            }
 
-        TakeUpTables(cancel);
+            return (Through(session), session.Outdated.Objects());
+        });
+        KillPoint.Pass("asked");
+        var done = 0;
+        recomputations.Progressed = () => progress?.Invoke(Math.Min(++done, all), all);
+        Recompute(Patience.Endless, cancel);
         new DayUpdate(configuration, store, now, Report) { Through = through }.Run(cancel);
-        store.Write(session => session.Derived.SetConfigHash(Basis));
         return Report;
     }
 
-    /// <returns>The dates through which people were computed: a rebuild ends with the same rows, whatever the clock says by now.</returns>
-    private Dictionary<string, LocalDate> EmptyDerived(StoreSession session)
+    private bool IsFromNothing => store.Read(session => session.Derived.Rebuild() == RebuildState.FromNothing);
+
+    /// <returns>The dates through which people are computed: a rebuild ends with the same rows, whatever the clock says by now.</returns>
+    private Dictionary<string, LocalDate> Through(StoreSession session) => configuration.People.Keys
+        .Select(person => (person, Date: session.People.ComputedTo(person)))
+        .Where(item => item.Date is not null)
+        .ToDictionary(item => item.person, item => item.Date!.Value, StringComparer.Ordinal);
+
+    /// <summary>What was computed on another basis is asked for again: anchors, owners, limits or formulas may differ.</summary>
+    private void Adopt()
     {
-        var through = configuration.People.Keys
-            .Select(person => (person, Date: session.People.ComputedTo(person)))
-            .Where(item => item.Date is not null)
-            .ToDictionary(item => item.person, item => item.Date!.Value, StringComparer.Ordinal);
-        session.Derived.Empty();
-        session.Derived.SetConfigHash("");
-        return through;
+        var renewed = store.Write(session => new Adoption(configuration, session).Run());
+        isNewConfiguration = renewed is not null;
+        decoder.Basis = TableBasis.Of(configuration, store);
+        new Renewal(configuration, store, decoder.Basis).Run(renewed);
     }
 
-    /// <summary>Rows first, then the recordings that they bear on.</summary>
-    private void TakeUpTables(CancellationToken cancel)
+    /// <summary>Contents first, since tables are among them; then rows, and the recordings that they bear on.</summary>
+    private void Recompute(Patience patience, CancellationToken cancel)
     {
+        recomputations.Run(patience, cancel);
         tables.TakeUp(cancel);
         decoder.Basis = TableBasis.Of(configuration, store);
-        recomputations.Run(cancel);
-    }
-
-    private IEnumerable<SeenContent> Kept(string objectSha, Action whenDone)
-    {
-        if (archive.Verify(objectSha))
+        recomputations.Run(patience, cancel);
+        Report.PeopleBehind = store.Write(session =>
         {
-            foreach (var content in reader.Kept(objectSha))
+            if (session.Outdated.Count() == 0)
             {
-                yield return content;
+                session.Derived.SetRebuild(RebuildState.None);
             }
-        }
-        else
-        {
-            // The others go on; the row says what is missing, and a later rebuild finds it again once the original is back.
-            settlement.Refuse(objectSha, "its original in the archive is missing or damaged");
-        }
 
-        whenDone();
-    }
-
-    /// <summary>The configuration and the formulas by which derived rows are computed.</summary>
-    private string Basis => $"{configuration.Hash}/{ActivityComputation.Version}";
-
-    /// <summary>What was computed on another basis is computed again: anchors, owners, limits or formulas may differ.</summary>
-    private void AdoptConfiguration(CancellationToken cancel)
-    {
-        var derivedUnder = store.Write(session =>
-        {
-            session.Configurations.Remember(configuration.Hash, configuration.Text);
-            return session.Derived.ConfigHash();
+            return session.Outdated.People();
         });
-        if (derivedUnder != Basis)
-        {
-            Rebuild(cancel);
-        }
     }
 
     private void Evaluate(CancellationToken cancel)
     {
-        // Nothing settled may be waiting (I-14): a night that is half in would raise what the other half returns.
-        if (store.Read(session => session.Arrivals.Waiting()).Any(arrival => !Recovery.IsSuspect(arrival)))
+        // Nothing settled may be waiting (I-14): a night that is half in would raise what the other half returns. Neither may rows be missing.
+        if (IsFromNothing || store.Read(session => session.Arrivals.Waiting()).Any(arrival => !Recovery.IsSuspect(arrival)))
         {
             return;
         }
 
-        new DayUpdate(configuration, store, now, Report).Run(cancel);
-        store.Write(new Evaluation(configuration, answers, briefs, now, Report).Run);
+        new DayUpdate(configuration, store, now, Report).Run(cancel, new Evaluation(configuration, answers, briefs, now, Report).Run);
         KillPoint.Pass("evaluated");
         new Deliveries(store, Deliveries.Channels(configuration), Report).Run(now);
-        new Pages(configuration, store, briefs, Report).Rewrite(now, all: !PagesAreCurrent || Report.HasNews);
+        new Pages(configuration, store, briefs, Report).Rewrite(now, all: !PagesAreCurrent || isNewConfiguration || Report.HasNews);
         PagesAreWritten = true;
     }
 }

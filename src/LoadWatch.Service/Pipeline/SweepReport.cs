@@ -31,11 +31,14 @@ public sealed class SweepReport
     /// <summary>All arrivals after the sweep, by state.</summary>
     public IReadOnlyDictionary<ArrivalState, int> InAll { get; set; } = new Dictionary<ArrivalState, int>();
 
+    /// <summary>Contents decoded again because what their rows stand on has changed.</summary>
+    public int Recomputed { get; set; }
+
+    /// <summary>People of whom some content is still to be decoded again with the configuration as it is now; their findings stand on what is stored.</summary>
+    public int PeopleBehind { get; set; }
+
     /// <summary>People whose days were computed.</summary>
     public int PeopleComputed { get; set; }
-
-    /// <summary>People whose values are still to be computed anew; their days stand as they were until then.</summary>
-    public int PeopleBehind { get; set; }
 
     /// <summary>Alerts raised, risen or returned.</summary>
     public int AlertChanges { get; set; }

@@ -22,6 +22,8 @@ public sealed class ActivityTable
 
     private const string UpdateRecordings = "UPDATE activity SET recordings = @Recordings, checksum = @Checksum WHERE key = @Key";
 
+    private const string Update = "UPDATE activity SET times_in_zone = @TimesInZone, remarks = @Remarks, quantities = @Quantities, checksum = @Checksum WHERE key = @Key";
+
     // Its histograms go with it.
     private const string Delete = "DELETE FROM activity WHERE key = @key";
 
@@ -73,6 +75,14 @@ public sealed class ActivityTable
         }
     }
 
+    /// <summary>Stores what histograms and reference values tell in place of what they told; all else stays.</summary>
+    public void Renew(StoredActivity activity)
+    {
+        var row = ActivityRow.From(activity);
+        row.Checksum = ActivityChecksum.Of(row, session.Rows<HistogramRow>(SelectHistograms, new { first = row.Key, last = row.Key }));
+        session.Execute(Update, row);
+    }
+
     /// <summary>Removes an activity; nothing when there is none.</summary>
     public void Remove(string key) => session.Execute(Delete, new { key });
 
@@ -86,6 +96,10 @@ public sealed class ActivityTable
 
     /// <summary>The first date of a person's activities, or null.</summary>
     public LocalDate? FirstOfPerson(string person) => session.Row<FirstRow>(SelectFirst, new { person })?.Date;
+
+    /// <summary>Time by value of every channel that has one.</summary>
+    public IReadOnlyDictionary<Channel, Histogram> Histograms(string key) => session.Rows<HistogramRow>(SelectHistograms, new { first = key, last = key })
+        .ToDictionary(row => Words<Channel>.Parse(row.Channel), row => HistogramCodec.Read(row.Bins));
 
     /// <summary>How a person's activities were made whose winning recordings start in the range, both ends included, sorted by that start and by key.</summary>
     public IReadOnlyList<StoredMerge> Merges(string person, Instant from, Instant to) =>

@@ -12,33 +12,47 @@ public sealed class Archive(DataFolder folder)
     private const int BufferBytes = 128 * 1024;
     private static int counter;
 
-    /// <summary>Reads the source once: hashes it, writes a copy and makes the copy durable. It gets its name by <see cref="Commit"/>.</summary>
+    /// <summary>
+    /// Reads the source once: hashes it and writes a copy, which is on its way to the disk when this returns. It becomes durable and gets its name by
+    /// <see cref="Commit"/>.
+    /// </summary>
     /// <param name="limitBytes">The most that is taken; at most 2 GB, since the bytes are kept in memory.</param>
     /// <exception cref="SourceUnreadableException">The source failed; nothing is left behind.</exception>
     /// <exception cref="IOException">The disk failed; nothing is left behind.</exception>
     public Staging Stage(Stream source, long limitBytes, CancellationToken cancel = default)
     {
         var temporary = TemporaryPath();
+        var copy = PrivateFiles.CreateOnce(temporary);
+        var bytes = new RentedBytes(ExpectedBytes(source, limitBytes));
         try
         {
-            var staged = CopyTo(temporary, source, limitBytes, cancel);
-            if (staged is OverLimit)
+            if (CopyTo(copy, bytes, source, limitBytes, cancel) is not { } sha)
             {
-                File.Delete(temporary);
+                Drop(copy, bytes, temporary);
+                return new OverLimit(limitBytes);
             }
 
-            return staged;
+            DurableFile.BeginSync(copy);
+            return new StagedCopy(sha, temporary, bytes, copy);
         }
         catch
         {
-            File.Delete(temporary);
+            Drop(copy, bytes, temporary);
             throw;
         }
     }
 
-    /// <summary>Gives the copies their names and makes those durable, each folder once. A copy of what is here already is deleted.</summary>
+    /// <summary>
+    /// Makes the copies durable, gives them their names and makes those durable, each folder once. All copies are on their way to the disk before the first is
+    /// waited for, so that a journalling file system writes its journal once for many. A copy of what is here already is deleted.
+    /// </summary>
     public void Commit(IReadOnlyList<StagedCopy> copies)
     {
+        foreach (var copy in copies)
+        {
+            copy.Sync();
+        }
+
         foreach (var copy in copies)
         {
             Place(copy);
@@ -52,8 +66,12 @@ public sealed class Archive(DataFolder folder)
         }
     }
 
-    /// <summary>Deletes a copy that is not wanted after all.</summary>
-    public static void Discard(StagedCopy copy) => File.Delete(copy.TemporaryPath);
+    /// <summary>Deletes a copy that is not wanted after all, and gives its memory back.</summary>
+    public static void Discard(StagedCopy copy)
+    {
+        copy.Dispose();
+        File.Delete(copy.TemporaryPath);
+    }
 
     public bool Exists(string sha) => File.Exists(PathOf(sha));
 
@@ -62,6 +80,20 @@ public sealed class Archive(DataFolder folder)
 
     /// <inheritdoc cref="Open"/>
     public byte[] Read(string sha) => File.ReadAllBytes(PathOf(sha));
+
+    /// <summary>The object, read once; null where it is missing or no longer has the content it is named by.</summary>
+    public byte[]? ReadWhole(string sha)
+    {
+        try
+        {
+            var bytes = Read(sha);
+            return string.Equals(Convert.ToHexStringLower(SHA256.HashData(bytes)), sha, StringComparison.Ordinal) ? bytes : null;
+        }
+        catch (FileNotFoundException)
+        {
+            return null;
+        }
+    }
 
     /// <summary>Whether the object is here and still has the content it is named by.</summary>
     public bool Verify(string sha)
@@ -92,31 +124,27 @@ public sealed class Archive(DataFolder folder)
         return Path.Combine(folder.IncomingPath, string.Create(CultureInfo.InvariantCulture, $"{Environment.ProcessId}-{number}.part"));
     }
 
-    private static Staging CopyTo(string path, Stream source, long limitBytes, CancellationToken cancel)
+    /// <returns>The SHA-256 of what was copied, or null where it is more than the limit.</returns>
+    private static string? CopyTo(FileStream copy, RentedBytes bytes, Stream source, long limitBytes, CancellationToken cancel)
     {
-        using var copy = PrivateFiles.CreateOnce(path);
         using var hash = IncrementalHash.CreateHash(HashAlgorithmName.SHA256);
-        using var kept = new MemoryStream(ExpectedBytes(source, limitBytes));
-        var buffer = new byte[BufferBytes];
-        for (var read = ReadSource(source, buffer); read > 0; read = ReadSource(source, buffer))
+        for (var read = ReadSource(source, bytes.Free(BufferBytes)); read > 0; read = ReadSource(source, bytes.Free(BufferBytes)))
         {
             cancel.ThrowIfCancellationRequested();
-            if (kept.Length + read > limitBytes)
+            if (bytes.Length + read > limitBytes)
             {
-                return new OverLimit(limitBytes);
+                return null;
             }
 
-            var piece = buffer.AsSpan(0, read);
+            var piece = bytes.Took(read);
             hash.AppendData(piece);
             copy.Write(piece);
-            kept.Write(piece);
         }
 
-        DurableFile.Sync(copy);
-        return new StagedCopy(Convert.ToHexStringLower(hash.GetHashAndReset()), kept.GetBuffer().AsMemory(0, (int)kept.Length), path);
+        return Convert.ToHexStringLower(hash.GetHashAndReset());
     }
 
-    private static int ReadSource(Stream source, byte[] buffer)
+    private static int ReadSource(Stream source, Span<byte> buffer)
     {
         try
         {
@@ -131,6 +159,13 @@ public sealed class Archive(DataFolder folder)
     private static int ExpectedBytes(Stream source, long limitBytes) =>
         source.CanSeek ? (int)Math.Min(source.Length - source.Position, limitBytes) : BufferBytes;
 
+    private static void Drop(FileStream copy, RentedBytes bytes, string path)
+    {
+        copy.Dispose();
+        bytes.Dispose();
+        File.Delete(path);
+    }
+
     private void Place(StagedCopy copy)
     {
         if (DurableFile.RenameWithoutOverwrite(copy.TemporaryPath, PathOf(copy.Sha)))
@@ -140,7 +175,7 @@ public sealed class Archive(DataFolder folder)
 
         if (Verify(copy.Sha))
         {
-            Discard(copy);
+            File.Delete(copy.TemporaryPath);
         }
         else
         {

@@ -1,14 +1,22 @@
+using LoadWatch.Storage.Dialects;
+
 namespace LoadWatch.Storage.Configurations;
 
 /// <summary>All derived tables together, and under which configuration their rows were computed.</summary>
 public sealed class DerivedRows
 {
-    private const string Upsert = """
-        INSERT INTO derived_state (key, value) VALUES ('config_hash', @hash)
-        ON CONFLICT (key) DO UPDATE SET value = excluded.value
-        """;
+    private const string Upsert = "INSERT INTO derived_state (key, value) VALUES (@key, @value) ON CONFLICT (key) DO UPDATE SET value = excluded.value";
+    private const string Select = "SELECT value FROM derived_state WHERE key = @key";
+    private const string ConfigHashKey = "config_hash";
+    private const string RebuildKey = "rebuild";
 
-    private const string Select = "SELECT value FROM derived_state WHERE key = 'config_hash'";
+    private static readonly string[] DeletesOfPerson =
+    [
+        "DELETE FROM finding WHERE person = @person",
+        "DELETE FROM day WHERE person = @person",
+        "DELETE FROM question WHERE person = @person",
+        "DELETE FROM person_state WHERE person = @person",
+    ];
 
     private static readonly string[] Deletes =
     [
@@ -24,6 +32,8 @@ public sealed class DerivedRows
         "DELETE FROM question",
         "DELETE FROM content_question",
         "DELETE FROM recomputation",
+        "DELETE FROM outdated",
+        "DELETE FROM basis",
         "DELETE FROM derived_state",
     ];
 
@@ -31,10 +41,16 @@ public sealed class DerivedRows
 
     internal DerivedRows(StoreSession session) => this.session = session;
 
-    /// <summary>The configuration under which the rows were computed, or null when unknown.</summary>
-    public string? ConfigHash() => session.Value<string>(Select);
+    /// <summary>The configuration under which rows were last asked for, or null when unknown.</summary>
+    public string? ConfigHash() => Value(ConfigHashKey);
 
-    public void SetConfigHash(string hash) => session.Execute(Upsert, new { hash });
+    /// <summary>Writes nothing where it says so already.</summary>
+    public void SetConfigHash(string hash) => Set(ConfigHashKey, hash);
+
+    public RebuildState Rebuild() => Value(RebuildKey) is { } word ? Words<RebuildState>.Parse(word) : RebuildState.None;
+
+    /// <inheritdoc cref="SetConfigHash"/>
+    public void SetRebuild(RebuildState state) => Set(RebuildKey, Words<RebuildState>.Of(state));
 
     /// <summary>Deletes every derived row. What is true stays: arrivals, sightings, decisions, alerts, notices, configurations, evaluations.</summary>
     public void Empty()
@@ -42,6 +58,25 @@ public sealed class DerivedRows
         foreach (var delete in Deletes)
         {
             session.Execute(delete);
+        }
+    }
+
+    /// <summary>Deletes the days, findings and questions of somebody who is watched no more; recordings go with their contents.</summary>
+    public void ForgetPerson(string person)
+    {
+        foreach (var delete in DeletesOfPerson)
+        {
+            session.Execute(delete, new { person });
+        }
+    }
+
+    private string? Value(string key) => session.Value<string>(Select, new { key });
+
+    private void Set(string key, string value)
+    {
+        if (!string.Equals(Value(key), value, StringComparison.Ordinal))
+        {
+            session.Execute(Upsert, new { key, value });
         }
     }
 }

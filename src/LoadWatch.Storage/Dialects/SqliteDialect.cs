@@ -76,9 +76,9 @@ public sealed class SqliteDialect : Dialect
 
     public override DbConnection OpenReader() => Open("PRAGMA query_only=ON");
 
-    public override DbTransaction BeginWrite(DbConnection connection) => ((SqliteConnection)connection).BeginTransaction(deferred: false);
+    public override DbTransaction BeginWrite(DbConnection connection) => Provided(connection).BeginTransaction(deferred: false);
 
-    public override DbTransaction BeginRead(DbConnection connection) => ((SqliteConnection)connection).BeginTransaction(deferred: true);
+    public override DbTransaction BeginRead(DbConnection connection) => Provided(connection).BeginTransaction(deferred: true);
 
     public override bool LostDurability(DbException error) =>
         error is SqliteException { SqliteExtendedErrorCode: IoErrorOnSync or IoErrorOnFolderSync };
@@ -91,7 +91,7 @@ public sealed class SqliteDialect : Dialect
         PrivateFiles.OpenOrCreate(path, FileShare.None).Dispose();
         using var copy = new SqliteConnection(new SqliteConnectionStringBuilder { DataSource = path, Mode = SqliteOpenMode.ReadWrite, Pooling = false }.ConnectionString);
         copy.Open();
-        ((SqliteConnection)connection).BackupDatabase(copy);
+        Provided(connection).BackupDatabase(copy);
     }
 
     public override IReadOnlyList<string> Check(DbConnection connection)
@@ -114,9 +114,11 @@ public sealed class SqliteDialect : Dialect
         }
     }
 
-    private SqliteConnection Open(string access)
+    private static SqliteConnection Provided(DbConnection connection) => (SqliteConnection)((PreparedConnection)connection).Inner;
+
+    private PreparedConnection Open(string access)
     {
-        var connection = new SqliteConnection(connectionString);
+        var connection = new PreparedConnection(new SqliteConnection(connectionString));
         try
         {
             connection.Open();

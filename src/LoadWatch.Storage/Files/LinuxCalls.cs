@@ -1,4 +1,6 @@
+using System.Globalization;
 using System.Runtime.InteropServices;
+using Microsoft.Win32.SafeHandles;
 
 namespace LoadWatch.Storage.Files;
 
@@ -11,6 +13,9 @@ internal static partial class LinuxCalls
     public const uint NoReplace = 1;
     public const int EmptyPath = 0x1000;
     public const int NoFollowAt = 0x100;
+
+    /// <summary>SYNC_FILE_RANGE_WRITE.</summary>
+    public const uint StartWriting = 2;
 
     /// <summary>Type, mode, size, times, inode: STATX_BASIC_STATS.</summary>
     public const uint BasicStats = 0x7ff;
@@ -33,8 +38,15 @@ internal static partial class LinuxCalls
     [LibraryImport("libc", EntryPoint = "fsync", SetLastError = true)]
     public static partial int Sync(int descriptor);
 
+    [LibraryImport("libc", EntryPoint = "sync_file_range", SetLastError = true)]
+    public static partial int SyncRange(SafeFileHandle file, long offset, long bytes, uint flags);
+
     [LibraryImport("libc", EntryPoint = "statx", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
     public static partial int Stat(int folder, string path, int flags, uint mask, out FileStatus status);
+
+    /// <param name="path">The first byte of the path, which ends with 0.</param>
+    [LibraryImport("libc", EntryPoint = "statx", SetLastError = true)]
+    public static partial int Stat(int folder, ref byte path, int flags, uint mask, out FileStatus status);
 
     [LibraryImport("libc", EntryPoint = "statfs", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
     public static partial int FileSystem(string path, out FileSystemStatus status);
@@ -92,7 +104,7 @@ internal struct FileStatus
 
     public readonly bool IsFolder => (Mode & TypeMask) == FolderType;
 
-    public readonly string Id => FormattableString.Invariant($"{DeviceMajor}.{DeviceMinor}:{Inode}");
+    public readonly string Id => string.Create(CultureInfo.InvariantCulture, $"{DeviceMajor}.{DeviceMinor}:{Inode}");
 
     /// <summary>With the time of birth, where the file system keeps it: the number of a deleted folder is soon given to the next.</summary>
     public readonly string IdWithBirth => (Mask & Born) == 0 ? Id : FormattableString.Invariant($"{Id}@{BornSeconds}.{BornNanoseconds:D9}");

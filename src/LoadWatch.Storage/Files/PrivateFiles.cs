@@ -45,7 +45,7 @@ public static class PrivateFiles
     /// <summary>Creates a new file with mode 0400: written through this stream only, read-only from then on.</summary>
     /// <exception cref="IOException">There is a file of this name.</exception>
     public static FileStream CreateOnce(string path) =>
-        Open(path, FileMode.CreateNew, FileAccess.Write, FileShare.None, UnixFileMode.UserRead);
+        Open(path, FileMode.CreateNew, FileAccess.Write, FileShare.Read, UnixFileMode.UserRead);
 
     private static FileStream Open(string path, FileMode mode, FileAccess access, FileShare share, UnixFileMode createMode)
     {

@@ -1,5 +1,6 @@
 using System.Globalization;
 using System.Runtime.InteropServices;
+using System.Text;
 using Microsoft.Win32.SafeHandles;
 
 namespace LoadWatch.Storage.Files;
@@ -7,8 +8,30 @@ namespace LoadWatch.Storage.Files;
 /// <summary>Opens what strangers put into a folder: never waits, never follows a link, takes regular files only.</summary>
 public static class SafeFile
 {
+    private const int LongestPathBytes = 1024;
+
     /// <summary>Opens a file for reading. No problem of the file is thrown; all are answers.</summary>
     public static FileOpening Open(string path) => OperatingSystem.IsLinux() ? OpenOnLinux(path) : OpenElsewhere(path);
+
+    /// <inheritdoc cref="StampOf(string)"/>
+    /// <remarks>For paths of which there are very many: on Linux none becomes a string.</remarks>
+    public static FileStamp? StampOf(ReadOnlySpan<char> path)
+    {
+        if (!OperatingSystem.IsLinux())
+        {
+            return StampOf(path.ToString());
+        }
+
+        Span<byte> bytes = stackalloc byte[LongestPathBytes];
+        if (!Encoding.UTF8.TryGetBytes(path, bytes[..^1], out var length))
+        {
+            return StampOf(path.ToString());
+        }
+
+        bytes[length] = 0;
+        return LinuxCalls.Stat(LinuxCalls.CurrentFolder, ref MemoryMarshal.GetReference(bytes), LinuxCalls.NoFollowAt, LinuxCalls.BasicStats, out var status) == 0
+            && status.IsRegular ? status.Stamp : null;
+    }
 
     /// <summary>The stamp of a regular file, links not followed; null where there is none.</summary>
     public static FileStamp? StampOf(string path)

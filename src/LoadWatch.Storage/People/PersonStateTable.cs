@@ -30,12 +30,17 @@ public sealed class PersonStateTable
         ORDER BY person
         """;
 
+    private const string SelectPeople = "SELECT person FROM person_state ORDER BY person";
+
     private readonly StoreSession session;
 
     internal PersonStateTable(StoreSession session) => this.session = session;
 
     /// <summary>Asks for a person's days from a date on; an earlier date asked for before stays.</summary>
     public void MarkDirty(string person, LocalDate from) => session.Execute(Mark, new { person, from });
+
+    /// <summary>Everybody whose days are or were to be computed, sorted.</summary>
+    public IReadOnlyList<string> All() => session.Rows<string>(SelectPeople);
 
     /// <summary>Whose days are to be computed again, sorted by person.</summary>
     public IReadOnlyList<DirtyPerson> Dirty() => session.Rows<Row>(SelectDirty).ConvertAll(row => new DirtyPerson(row.Person, row.DirtyFrom));

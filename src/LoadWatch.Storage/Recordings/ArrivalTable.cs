@@ -6,6 +6,9 @@ namespace LoadWatch.Storage.Recordings;
 /// <summary>Table <c>arrival</c>: what came in, once for each content (I-1).</summary>
 public sealed class ArrivalTable
 {
+    /// <summary>So many decodings that brought their process down refuse an arrival.</summary>
+    public const int MostAttempts = 3;
+
     private const string Columns = "sha, parent_sha, object_sha, kind, state, reason, person, attempts, size";
 
     private const string Insert = """

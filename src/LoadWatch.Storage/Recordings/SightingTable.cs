@@ -20,6 +20,14 @@ public sealed class SightingTable
 
     private const string Delete = "DELETE FROM sighting WHERE inbox = @Inbox AND path = @Path AND sha = @Sha";
     private const string SelectLatest = $"SELECT {Columns} FROM sighting WHERE inbox = @inbox AND latest = 1";
+    private const string CountLatestOf = "SELECT COUNT(*) FROM sighting WHERE inbox = @inbox AND latest = 1";
+
+    // The empty text keeps the index out of it: going through the table in its own order is faster than through a million places of it.
+    private const string SelectStamps = "SELECT path, size, mtime, file_id FROM sighting WHERE inbox || '' = @inbox AND latest = 1";
+    private const string SelectStored = """
+        SELECT s.sha, a.person, s.inbox, s.path FROM sighting s JOIN arrival a ON a.sha = s.sha WHERE a.state = 'stored' ORDER BY s.sha
+        """;
+
     private const string SelectOfPath = $"SELECT {Columns} FROM sighting WHERE path = @path";
     private const string SelectOf = $"SELECT {Columns} FROM sighting WHERE sha = @sha";
 
@@ -49,6 +57,18 @@ public sealed class SightingTable
     /// <summary>The newest content of every name in an inbox, by path.</summary>
     public IReadOnlyDictionary<string, Sighting> Latest(string inbox) =>
         session.Rows<Row>(SelectLatest, new { inbox }).ToDictionary(row => row.Path, row => row.ToSighting(), StringComparer.Ordinal);
+
+    /// <summary>Number of names in an inbox.</summary>
+    public int CountLatest(string inbox) => session.Value<int>(CountLatestOf, new { inbox });
+
+    /// <summary>Goes through the names of an inbox with the stamps of their newest contents, in no order: there may be a million.</summary>
+    public void EachLatest(string inbox, Action<string, FileStamp> each) => session.EachRow(
+        SelectStamps, new { inbox }, row => each(row.GetString(0), new FileStamp(row.GetInt64(1), row.GetInt64(2), row.GetString(3))));
+
+    /// <summary>Goes through all names of stored contents, those of one content behind each other.</summary>
+    /// <param name="each">Gets the content, its owner or null, the inbox and the path.</param>
+    public void EachStored(Action<string, string?, string, string> each) => session.EachRow(
+        SelectStored, null, row => each(row.GetString(0), row.IsDBNull(1) ? null : row.GetString(1), row.GetString(2), row.GetString(3)));
 
     /// <summary>Notes that a name holds a content now. The first moment of the pair stays; the stamp is the new one. A content that comes back counts anew from now on.</summary>
     public void Upsert(string inbox, string path, string sha, Instant firstSeen, FileStamp stamp)

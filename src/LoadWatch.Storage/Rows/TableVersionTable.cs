@@ -28,6 +28,9 @@ public sealed class TableVersionTable
     private const string DeleteApplied = "DELETE FROM table_version WHERE scope = @scope";
     private const string InsertApplied = "INSERT INTO table_version (scope, path, sha, since, owner) VALUES (@Scope, @Path, @Sha, @Since, @Owner)";
 
+    // Like no version that is seen, so that all of them are taken anew.
+    private const string Outdate = "UPDATE table_version SET owner = '?'";
+
     private readonly StoreSession session;
 
     internal TableVersionTable(StoreSession session) => this.session = session;
@@ -51,6 +54,9 @@ public sealed class TableVersionTable
         session.Execute(DeleteApplied, new { scope });
         session.ExecuteEach(InsertApplied, versions);
     }
+
+    /// <summary>Asks for the rows of every table anew, from all of its versions; those that stand stay until then.</summary>
+    public void ReplayAll() => session.Execute(Outdate);
 
     private static List<TableVersion> InOrder(IEnumerable<TableVersion> versions) =>
     [

@@ -15,7 +15,7 @@ public static class NamedKills
         ["staged", "placed", "archived", "waiting", "decoded", "aside", "settled", "rows", "evaluated", "delivered", "replaced"];
 
     /// <summary>Passed by a rebuild.</summary>
-    public static IReadOnlyList<string> OfRebuild { get; } = ["emptied", "decoded", "rows"];
+    public static IReadOnlyList<string> OfRebuild { get; } = ["asked", "decoded", "rows"];
 
     public static IReadOnlyList<Scenario> All { get; } =
     [

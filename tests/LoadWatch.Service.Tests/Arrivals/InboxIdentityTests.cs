@@ -143,7 +143,7 @@ public sealed class InboxIdentityTests : IDisposable
                     never.Wait(TestContext.Current.CancellationToken);
                 }
 
-                return Inboxes.Look(inbox, new Dictionary<string, LoadWatch.Storage.Recordings.Sighting>(), progress)!;
+                return Inboxes.Look(inbox, new KnownInbox(), progress)!;
             },
             () => { });
         Assert.Null(looks[0]);

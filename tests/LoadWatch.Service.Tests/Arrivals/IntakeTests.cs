@@ -28,6 +28,22 @@ public sealed class IntakeTests : IDisposable
     }
 
     [Fact]
+    public void TheSameBytesInGroupsBehindEachOtherAreClaimedByBoth()
+    {
+        var twice = Some.Fit(Some.Yesterday, 1);
+        folder.Fill(Enumerable.Range(0, 63).Select(number => ($"anna/{number:00}.fit", Some.Fit(Some.Yesterday.PlusDays(-number), 2))));
+        folder.Put("anna/zz.fit", twice);
+        folder.Put("bo/00.fit", twice);
+        folder.Put("bo/01.fit", Some.Fit(Some.Yesterday, 3));
+
+        folder.Sweep();
+
+        Assert.Equal((ArrivalState.Held, "claimed by anna and bo"), (folder.Arrival(twice)!.State, folder.Arrival(twice)!.Reason));
+        Assert.Equal(64, folder.Arrivals().Count(arrival => arrival.State == ArrivalState.Stored));
+        Assert.Equal(66, folder.Read((_, session) => session.Sightings.CountLatest("inbox")));
+    }
+
+    [Fact]
     public void AWholeFitFileIsTakenAtOnce()
     {
         folder.Put("anna/ride.fit", Some.Fit(Some.Yesterday), Duration.Zero);

@@ -101,9 +101,24 @@ internal sealed class WorkingFolder : IDisposable
     }
 
     /// <summary>One sweep in this process; a probe is only asked where an earlier process died.</summary>
-    public SweepReport Sweep(Instant? now = null, IDecodeProbe? probe = null) => Work(now, probe, sweep => sweep.Run());
+    public SweepReport Sweep(Instant? now = null, IDecodeProbe? probe = null, TimeSpan? recomputesFor = null) =>
+        Work(now, probe, sweep => sweep.Run(), recomputesFor);
 
     public SweepReport Rebuild(Instant? now = null) => Work(now, null, sweep => sweep.Rebuild(CancellationToken.None));
+
+    /// <summary>A rebuild that is told to stop when so many originals are through.</summary>
+    public void Rebuild(int cancelAfter, Action<int, int> seen)
+    {
+        using var cancel = new CancellationTokenSource();
+        Work(null, null, sweep => sweep.Rebuild(cancel.Token, (done, all) =>
+        {
+            seen(done, all);
+            if (done == cancelAfter)
+            {
+                cancel.Cancel();
+            }
+        }));
+    }
 
     /// <summary>Decides whose a content is, as the command does.</summary>
     public void Assign(byte[] bytes, string person, Instant? now = null)
@@ -179,13 +194,13 @@ internal sealed class WorkingFolder : IDisposable
 
     public void Dispose() => root.Delete(recursive: true);
 
-    private SweepReport Work(Instant? now, IDecodeProbe? probe, Func<Sweep, SweepReport> work)
+    private SweepReport Work(Instant? now, IDecodeProbe? probe, Func<Sweep, SweepReport> work, TimeSpan? recomputesFor = null)
     {
         var configuration = ConfigurationReader.Read(ConfigPath);
         var folder = DataFolder.Open(configuration.DataFolder);
         using var alone = InstanceLock.Take(folder);
         using var store = Store.Open(folder);
-        return work(new Sweep(configuration, folder, store, now ?? Now, probe ?? new NoProbe()));
+        return work(new Sweep(configuration, folder, store, now ?? Now, probe ?? new NoProbe()) { RecomputesFor = recomputesFor ?? TimeSpan.MaxValue });
     }
 
     private sealed class NoProbe : IDecodeProbe

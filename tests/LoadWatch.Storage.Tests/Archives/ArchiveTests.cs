@@ -138,6 +138,39 @@ public sealed class ArchiveTests : IDisposable
     public void ANameThatIsNoShaIsRefused(string name) => Assert.Throws<ArgumentException>(() => archive.Exists(name));
 
     [Fact]
+    public void AnObjectIsReadWholeOrNotAtAll()
+    {
+        Assert.Null(archive.ReadWhole(ShaOfAbc));
+        archive.Commit([Stage("abc")]);
+        Assert.Equal("abc"u8.ToArray(), archive.ReadWhole(ShaOfAbc));
+
+        var path = archive.PathOf(ShaOfAbc);
+        File.Delete(path);
+        File.WriteAllText(path, "abx");
+        Assert.Null(archive.ReadWhole(ShaOfAbc));
+    }
+
+    [Fact]
+    public void MemoryThatIsGivenBackShowsNothingOfTheNextFile()
+    {
+        var copy = Stage("abc");
+        copy.Dispose();
+        using var next = Stage("xyz");
+
+        Assert.Throws<ObjectDisposedException>(() => copy.Bytes);
+        Assert.Equal("xyz"u8.ToArray(), next.Bytes.ToArray());
+    }
+
+    [Fact]
+    public void ASourceThatDoesNotTellItsLengthIsCopiedWhole()
+    {
+        var bytes = Enumerable.Range(0, 3_000_001).Select(number => (byte)(number / 11 % 251)).ToArray();
+        using var copy = Assert.IsType<StagedCopy>(archive.Stage(new Unseekable(bytes), 4_000_000, TestContext.Current.CancellationToken));
+        Assert.Equal(bytes, copy.Bytes.ToArray());
+        Assert.Equal(bytes, File.ReadAllBytes(copy.TemporaryPath));
+    }
+
+    [Fact]
     public void AMissingObjectIsAnError()
     {
         Assert.False(archive.Verify(ShaOfAbc));
@@ -146,6 +179,11 @@ public sealed class ArchiveTests : IDisposable
 
     private StagedCopy Stage(string content) =>
         Assert.IsType<StagedCopy>(archive.Stage(new MemoryStream(Encoding.UTF8.GetBytes(content)), 1000, TestContext.Current.CancellationToken));
+
+    private sealed class Unseekable(byte[] bytes) : MemoryStream(bytes)
+    {
+        public override bool CanSeek => false;
+    }
 
     private sealed class FailingStream : MemoryStream
     {

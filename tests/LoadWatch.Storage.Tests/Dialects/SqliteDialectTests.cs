@@ -115,7 +115,7 @@ public sealed class SqliteDialectTests : IDisposable
 
         using var writer = dialect.OpenWriter();
 
-        Assert.Equal(5, ((SqliteConnection)writer).DefaultTimeout);
+        Assert.Equal(5, ((SqliteConnection)((PreparedConnection)writer).Inner).DefaultTimeout);
     }
 
     [Fact]

@@ -1,0 +1,183 @@
+using LoadWatch.Recordings;
+using LoadWatch.Rows;
+using LoadWatch.Service.Configuration;
+using LoadWatch.Storage;
+using LoadWatch.Storage.Configurations;
+using NodaTime;
+using NodaTime.Text;
+
+namespace LoadWatch.Service.Pipeline;
+
+/// <summary>
+/// Takes over a configuration: compares its parts with those that rows stand on, and in one transaction asks for just what depends on the changed ones: contents
+/// to be decoded again, tables to be read again, days to be computed again. Nothing is dropped; what stands is replaced as its successor comes.
+/// </summary>
+public sealed class Adoption
+{
+    /// <summary>Before any recording or row.</summary>
+    private static readonly LocalDate Beginning = new(1900, 1, 1);
+
+    private static readonly Instant End = Instant.FromUtc(9999, 1, 1, 0, 0);
+
+    /// <summary>A recording's local date and the date of its start in UTC are one apart at most, and a reference value is asked for on either side of midnight.</summary>
+    private const int NearDays = 2;
+
+    private readonly WorkingConfiguration configuration;
+    private readonly StoreSession session;
+    private readonly Lazy<bool> hasTimedPlan;
+    private readonly Dictionary<string, LocalDate> renewed = new(StringComparer.Ordinal);
+    private ILookup<(string Scope, string Part), string> before = null!;
+    private ILookup<(string Scope, string Part), string> after = null!;
+
+    public Adoption(WorkingConfiguration configuration, StoreSession session)
+    {
+        this.configuration = configuration;
+        this.session = session;
+        hasTimedPlan = new Lazy<bool>(() => session.TableRows.OfKind(RowKind.Plan).Any(TableBasis.Matters));
+    }
+
+    /// <returns>The people whose reference values changed, with the first date on which they do; null where rows stand on this configuration already.</returns>
+    public IReadOnlyDictionary<string, LocalDate>? Run()
+    {
+        session.Configurations.Remember(configuration.Hash, configuration.Text);
+        var basis = $"{configuration.Hash}/{Activities.ActivityComputation.Version}";
+        var (stored, storedBasis) = (session.Derived.ConfigHash() is null ? [] : session.Basis.All(), session.Derived.ConfigHash());
+        if (stored.Count > 0 && storedBasis == basis)
+        {
+            return null;
+        }
+
+        var parts = BasisParts.Of(configuration);
+        (before, after) = (Lookup(stored), Lookup(parts));
+        ForgetStrangers();
+        Ask(isFromNothing: stored.Count == 0);
+        session.Basis.Replace(parts);
+        session.Derived.SetConfigHash(basis);
+        return renewed;
+    }
+
+    /// <summary>Asks for everything, whatever it stands on.</summary>
+    public void AskForAll(RebuildState state)
+    {
+        session.Outdated.AddAll();
+        session.TableVersions.ReplayAll();
+        foreach (var person in session.People.All())
+        {
+            session.People.MarkDirty(person, Beginning);
+        }
+
+        // Once the rows were gone they are, until all are back.
+        session.Derived.SetRebuild(session.Derived.Rebuild() == RebuildState.FromNothing ? RebuildState.FromNothing : state);
+    }
+
+    private static ILookup<(string Scope, string Part), string> Lookup(IEnumerable<BasisPart> parts) => parts.ToLookup(part => (part.Scope, part.Part), part => part.Value);
+
+    /// <summary>Those who left the roster. Their recordings are judged again with everything that names decide.</summary>
+    private void ForgetStrangers()
+    {
+        foreach (var person in session.People.All().Where(person => configuration.People.GetValueOrDefault(person)?.Id != person))
+        {
+            session.Derived.ForgetPerson(person);
+        }
+    }
+
+    private void Ask(bool isFromNothing)
+    {
+        if (isFromNothing)
+        {
+            AskForAll(RebuildState.FromNothing);
+            return;
+        }
+
+        if (Changed(BasisParts.Formulas) || Changed(BasisParts.Computation))
+        {
+            AskForAll(RebuildState.OverRows);
+        }
+
+        if (Changed(BasisParts.Layouts))
+        {
+            session.Outdated.AddText();
+            session.TableVersions.ReplayAll();
+        }
+
+        if (Changed(BasisParts.Names) || Changed(BasisParts.Devices))
+        {
+            // Whose a row is, is said while tables are read.
+            session.TableVersions.ReplayAll();
+        }
+
+        if (Changed(BasisParts.Names) || Changed(BasisParts.Devices) || Changed(BasisParts.FileNames))
+        {
+            AskForOwners();
+        }
+
+        foreach (var person in configuration.People.Keys)
+        {
+            AskFor(person);
+        }
+    }
+
+    private bool Changed(string part, string scope = BasisParts.Everybody) => !before[(scope, part)].SequenceEqual(after[(scope, part)], StringComparer.Ordinal);
+
+    private void AskFor(string person)
+    {
+        if (Changed(BasisParts.Group, person))
+        {
+            // A planned session may be cut out of the recordings, and whose it is goes by the group.
+            session.People.MarkDirty(person, Beginning);
+            AskForRecordings(person, hasTimedPlan.Value ? Beginning : null);
+        }
+
+        if (Changed(BasisParts.Rules, person))
+        {
+            session.People.MarkDirty(person, Beginning);
+        }
+
+        LocalDate?[] references = [Changed(BasisParts.Profile, person) ? Beginning : null, FirstChangedAnchor(person)];
+        if (references.Min() is { } renewable)
+        {
+            renewed[person] = renewable;
+        }
+
+        AskForRecordings(person, references.Append(FirstChangedHeartRate(person)).Min());
+        if (references[1] is not null)
+        {
+            // By another reference value they may be their owner's, or no longer be.
+            session.Outdated.AddInState(ArrivalState.Held);
+            session.Outdated.AddAsked();
+        }
+    }
+
+    private void AskForRecordings(string person, LocalDate? from)
+    {
+        if (from is { } date)
+        {
+            session.Outdated.AddRecordings(person, date.PlusDays(-NearDays).AtMidnight().InUtc().ToInstant(), End);
+            session.People.MarkDirty(person, date);
+        }
+    }
+
+    /// <summary>The earlier of the two dates, of which one may be missing.</summary>
+    private LocalDate? FirstChangedHeartRate(string person) => Changed(BasisParts.HeartRate, person)
+        ? before[(person, BasisParts.HeartRate)].Concat(after[(person, BasisParts.HeartRate)]).Where(text => text.Length > 0).Select(text => (LocalDate?)LocalDatePattern.Iso.Parse(text).Value).Min()
+        : null;
+
+    private LocalDate? FirstChangedAnchor(string person)
+    {
+        var (old, now) = (Anchors(before, person), Anchors(after, person));
+        return old.Except(now, StringComparer.Ordinal).Concat(now.Except(old, StringComparer.Ordinal)).Select(line => (LocalDate?)(BasisParts.DateOf(line) ?? Beginning)).Min();
+    }
+
+    private static IReadOnlyList<string> Anchors(ILookup<(string Scope, string Part), string> parts, string person) =>
+        [.. parts[(person, BasisParts.Anchors)].SelectMany(text => text.Split('\n', StringSplitOptions.RemoveEmptyEntries))];
+
+    /// <summary>Who owns a content is judged by its names alone where they name anybody; only the others are decoded for it.</summary>
+    private void AskForOwners()
+    {
+        session.Outdated.AddInState(ArrivalState.Held);
+        foreach (var sha in new OwnerChanges(configuration, session).Find())
+        {
+            session.Outdated.Add(sha);
+        }
+    }
+}

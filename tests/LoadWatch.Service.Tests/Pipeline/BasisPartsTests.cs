@@ -1,0 +1,42 @@
+using LoadWatch.People;
+using LoadWatch.Service.Configuration;
+
+namespace LoadWatch.Service.Tests.Pipeline;
+
+/// <summary>
+/// A property that is in no part of the basis must change no derived row: who adds one decides here, and in <c>BasisParts</c> where rows depend on it.
+/// </summary>
+public sealed class BasisPartsTests
+{
+    private static readonly string[] OfConfiguration = ["People", "Groups", "Anchors", "Layouts", "Computation", "Devices", "Inboxes"];
+
+    private static readonly string[] WithoutRows =
+    [
+        "Folder", "Hash", "Text", "DataFolder", "PagesFolder", "NoticesFolder", "Contacts", "ScanEvery", "Settle", "LargestFileBytes", "Mail", "AllowNetworkDataFolder", "Administrators",
+        "Subjects", // Of people, groups and devices.
+    ];
+
+    [Fact]
+    public void EveryPropertyOfTheConfigurationIsDecidedAbout() =>
+        Assert.Equal(Sorted([.. OfConfiguration, .. WithoutRows]), Properties(typeof(WorkingConfiguration)));
+
+    [Fact]
+    public void EveryPropertyOfAPersonIsInAPart() =>
+        Assert.Equal(Sorted(["Id", "Name", "Group", "BirthYear", "Sex", "Zone", "HeartRateInvalidFrom", "Aliases"]), Properties(typeof(Person)));
+
+    [Fact]
+    public void EveryPropertyOfAGroupIsInAPart() =>
+        Assert.Equal(Sorted(["Id", "Name", "LoadQuantity", "Limits", "LoadFallbacks"]), Properties(typeof(Group)));
+
+    [Fact]
+    public void EveryPropertyOfAnAnchorIsInItsLine() =>
+        Assert.Equal(Sorted(["Person", "Date", "Kind", "Value", "Source", "Exercise", "Note", "Machine"]), Properties(typeof(Anchor)));
+
+    [Fact]
+    public void OfAnInboxNameAndPatternCount() =>
+        Assert.Equal(Sorted(["Name", "FilePattern", "Path", "Take", "Marker"]), Properties(typeof(Inbox)));
+
+    private static IReadOnlyList<string> Properties(Type type) => Sorted(type.GetProperties().Select(property => property.Name));
+
+    private static IReadOnlyList<string> Sorted(IEnumerable<string> names) => [.. names.Order(StringComparer.Ordinal)];
+}
