@@ -24,6 +24,14 @@ public sealed class FaultsTests
         Catalogue.All.SelectMany(scenario => scenario.Faults.Split(' ')).Except(Faults.All.Select(fault => fault.Id), StringComparer.Ordinal));
 
     [Fact]
+    public void TheReadmeHoldsTheTable()
+    {
+        Assert.SkipWhen(Repository.Root is null, "the tests do not run inside the repository");
+        var readme = File.ReadAllText(Path.Combine(Repository.Root!, "tests", "README.md"));
+        Assert.All(Faults.All, fault => Assert.Contains(fault.Row(), readme, StringComparison.Ordinal));
+    }
+
+    [Fact]
     public void EveryTestThatProvesAFaultIsThere()
     {
         Assert.SkipWhen(Repository.Root is null, "the tests do not run inside the repository");
