@@ -39,8 +39,9 @@ public sealed class FaultsTests
         Assert.All(Faults.All.SelectMany(fault => fault.TestNames), name =>
         {
             var (file, method) = (name.Split('.')[0], name.Split('.').ElementAtOrDefault(1));
-            var text = File.ReadAllText(files.First(path => path.EndsWith($"/{file}.cs", StringComparison.Ordinal)));
-            Assert.Contains(method is null ? $"class {Path.GetFileName(file)}" : $" {method}(", text, StringComparison.Ordinal);
+            var found = files.Find(path => path.EndsWith($"/{file}.cs", StringComparison.Ordinal));
+            Assert.True(found is not null, name);
+            Assert.Contains(method is null ? $"class {Path.GetFileName(file)}" : $" {method}(", File.ReadAllText(found), StringComparison.Ordinal);
         });
     }
 }
