@@ -24,6 +24,14 @@ public sealed class FaultsTests
         Catalogue.All.SelectMany(scenario => scenario.Faults.Split(' ')).Except(Faults.All.Select(fault => fault.Id), StringComparer.Ordinal));
 
     [Fact]
+    public void TheReadmeHoldsTheTable()
+    {
+        Assert.SkipWhen(Repository.Root is null, "the tests do not run inside the repository");
+        var readme = File.ReadAllText(Path.Combine(Repository.Root!, "tests", "README.md"));
+        Assert.All(Faults.All, fault => Assert.Contains(fault.Row(), readme, StringComparison.Ordinal));
+    }
+
+    [Fact]
     public void EveryTestThatProvesAFaultIsThere()
     {
         Assert.SkipWhen(Repository.Root is null, "the tests do not run inside the repository");
@@ -31,8 +39,9 @@ public sealed class FaultsTests
         Assert.All(Faults.All.SelectMany(fault => fault.TestNames), name =>
         {
             var (file, method) = (name.Split('.')[0], name.Split('.').ElementAtOrDefault(1));
-            var text = File.ReadAllText(files.First(path => path.EndsWith($"/{file}.cs", StringComparison.Ordinal)));
-            Assert.Contains(method is null ? $"class {Path.GetFileName(file)}" : $" {method}(", text, StringComparison.Ordinal);
+            var found = files.Find(path => path.EndsWith($"/{file}.cs", StringComparison.Ordinal));
+            Assert.True(found is not null, name);
+            Assert.Contains(method is null ? $"class {Path.GetFileName(file)}" : $" {method}(", File.ReadAllText(found), StringComparison.Ordinal);
         });
     }
 }

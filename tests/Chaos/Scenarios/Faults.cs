@@ -10,7 +10,7 @@ public static class Faults
         new("A3", "a copy under a name of its own, then renamed"),
         new("A4", "renamed while it is read"),
         new("A5", "the same bytes under many names"),
-        new("A6", "the same session from several devices and as a table", "Activities/SameSessionTests"),
+        new("A6", "the same session from several devices and as a table", "Activities/SessionPlansTests"),
         new("A7", "the same name with a new content", "Pipeline/GrowingTableTests"),
         new("A8", "overwritten while it is read", "Archives/ArchiveTests"),
         new("A9", "cut or removed while it is read; a folder named like a file"),
