@@ -20,7 +20,7 @@ public sealed class RunTests : IDisposable
         Assert.SkipWhen(OperatingSystem.IsWindows(), "there is no SIGTERM on Windows");
         var page = Path.Combine(folder.Root, "pages", "staff.html");
         using var service = Loadwatch.Start(["run", "--config", folder.ConfigPath]);
-        Await(service, () => File.Exists(Path.Combine(folder.Data, "status.json")));
+        Await(service, () => File.Exists(page));
         var before = File.ReadAllText(page);
         Assert.Empty(folder.Export("arrivals"));
         folder.Put("anna/ride.fit", Some.Fit(new LocalDate(2025, 6, 14)));
