@@ -49,6 +49,7 @@ public sealed class PersonPlan
         }
 
         var entries = EntriesOn(date).ToList();
+        IReadOnlyList<PlanWord> phases = [.. PhaseWords.Where(word => entries.Exists(entry => entry.Word == word))];
         var absence = Absences.Where(absence => absence.Covers(date)).MaxBy(absence => absence.From)?.Word;
         var rest = entries.Exists(entry => entry.Word == PlanWord.Rest) ? "plan" : Rests.GetValueOrDefault(date);
         return new DayPlan(
@@ -57,7 +58,7 @@ public sealed class PersonPlan
             entries.Exists(entry => entry.Word == PlanWord.Match),
             rest,
             absence is null && rest is null ? entries.Count(entry => entry.RecordingExpected) : 0,
-            [.. PhaseWords.Where(word => entries.Exists(entry => entry.Word == word))]);
+            phases.Count == 0 ? DayPlan.None.Phases : phases);
     }
 
     /// <summary>Counted from the latest of what says that the person is back: the end of a break, a return as told, a planned return.</summary>

@@ -7,26 +7,18 @@ namespace LoadWatch.Storage.Dialects;
 /// <summary>Stands for a prepared command of its connection between the text that it is given and its end.</summary>
 internal sealed class PreparedCommand(PreparedConnection connection) : DbCommand
 {
+    /// <summary>Holds the parameters: who fills them in may change the text meanwhile, as Dapper does to write a list out.</summary>
+    private readonly DbCommand given = connection.Inner.CreateCommand();
+
     private DbCommand? inner;
 
     [AllowNull]
-    public override string CommandText
-    {
-        get => inner?.CommandText ?? "";
-        set
-        {
-            if (!string.Equals(value, inner?.CommandText, StringComparison.Ordinal))
-            {
-                GiveBack();
-                inner = connection.Take(value ?? "");
-            }
-        }
-    }
+    public override string CommandText { get; set; } = "";
 
     public override int CommandTimeout
     {
-        get => Inner.CommandTimeout;
-        set => Inner.CommandTimeout = value;
+        get => given.CommandTimeout;
+        set => given.CommandTimeout = value;
     }
 
     public override CommandType CommandType { get; set; } = CommandType.Text;
@@ -41,11 +33,9 @@ internal sealed class PreparedCommand(PreparedConnection connection) : DbCommand
         set => throw new NotSupportedException("a prepared command belongs to its connection");
     }
 
-    protected override DbParameterCollection DbParameterCollection => Inner.Parameters;
+    protected override DbParameterCollection DbParameterCollection => given.Parameters;
 
     protected override DbTransaction? DbTransaction { get; set; }
-
-    private DbCommand Inner => inner ?? throw new InvalidOperationException("the command has no text yet");
 
     public override void Cancel() => inner?.Cancel();
 
@@ -55,7 +45,7 @@ internal sealed class PreparedCommand(PreparedConnection connection) : DbCommand
 
     public override void Prepare() => Ready().Prepare();
 
-    protected override DbParameter CreateDbParameter() => Inner.CreateParameter();
+    protected override DbParameter CreateDbParameter() => given.CreateParameter();
 
     protected override DbDataReader ExecuteDbDataReader(CommandBehavior behavior) => Ready().ExecuteReader(behavior);
 
@@ -64,6 +54,7 @@ internal sealed class PreparedCommand(PreparedConnection connection) : DbCommand
         if (disposing)
         {
             GiveBack();
+            given.Dispose();
         }
 
         base.Dispose(disposing);
@@ -71,8 +62,21 @@ internal sealed class PreparedCommand(PreparedConnection connection) : DbCommand
 
     private DbCommand Ready()
     {
-        Inner.Transaction = DbTransaction;
-        return Inner;
+        if (inner?.CommandText != CommandText)
+        {
+            GiveBack();
+            inner = connection.Take(CommandText);
+        }
+
+        inner.Parameters.Clear();
+        foreach (DbParameter parameter in given.Parameters)
+        {
+            inner.Parameters.Add(parameter);
+        }
+
+        inner.CommandTimeout = given.CommandTimeout;
+        inner.Transaction = DbTransaction;
+        return inner;
     }
 
     private void GiveBack()

