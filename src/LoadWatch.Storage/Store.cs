@@ -129,10 +129,24 @@ public sealed class Store : IDisposable
     {
         while (idleReaders.TryTake(out var reader))
         {
-            reader.Dispose();
+            Close(reader);
         }
 
-        writer?.Dispose();
+        if (writer is not null)
+        {
+            Close(writer);
+        }
+    }
+
+    /// <summary>The last to close would else empty the log into the database, of which nobody knows any more what of it is on the disk.</summary>
+    private void Close(DbConnection connection)
+    {
+        if (lost is not null)
+        {
+            dialect.LeaveLog(connection);
+        }
+
+        connection.Dispose();
     }
 
     private DbConnection Writer => writer ?? throw new InvalidOperationException("the store was opened to be read only");

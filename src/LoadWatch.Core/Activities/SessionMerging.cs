@@ -21,7 +21,7 @@ internal sealed class SessionMerging(
     {
         var rates = Rates.SelectMany(RateGifts).ToList();
         var span = new SessionSpan(group.Winner, one => claimed(one, null), rates);
-        var sport = able.FirstOrDefault(one => one.Sport.Name != Sport.Generic.Name);
+        var sport = SportGiver(span);
         var distance = OfWholeSession(one => one.DistanceMetres is > 0, span, SessionClaims.Ran);
         var sets = SetGivers();
         List<(RecordingSummary Recording, Gift Gift)> gifts =
@@ -60,6 +60,13 @@ internal sealed class SessionMerging(
     {
         var telling = able.Where(one => tells(one) && (one == group.Winner || claimed(one, null).Count == 0)).ToList();
         return telling.Find(one => span.IsCoveredBy(extent(one))) ?? telling.FirstOrDefault();
+    }
+
+    /// <summary>What the session as a whole was: a short ride in it does not make a match a ride.</summary>
+    private RecordingSummary? SportGiver(SessionSpan span)
+    {
+        var giver = OfWholeSession(one => one.Sport.Name != Sport.Generic.Name, span, SessionClaims.Ran) ?? able.FirstOrDefault(one => one.Sport.Name != Sport.Generic.Name);
+        return giver?.Sport == group.Winner.Sport ? group.Winner : giver;
     }
 
     /// <summary>The richest that holds sets, and besides it those that are no second record of it: two lists of one hour may be two rooms.</summary>

@@ -22,8 +22,8 @@ internal sealed class SessionSpan
         all = own.Concat(gifts.Where(given => given.Recording != winner).SelectMany(given => Given(given).SelectMany(one => one.Without(claimed(given.Recording))))).Joined();
     }
 
-    /// <summary>Whether a part of it belongs to a richer activity.</summary>
-    public bool IsCut => own is not [{ } only] || only != SessionClaims.Ran(winner);
+    /// <summary>Whether a part of the winner belongs to a richer activity: so much that what it states of the whole is not of this activity. A choice.</summary>
+    public bool IsCut => new[] { SessionClaims.Ran(winner) }.Length() - own.Length() > ChannelGifts.ShortestMilliseconds;
 
     /// <summary>Of the unbroken stretch in which the winner starts: a part behind another activity does not move a session there.</summary>
     public Instant Start

@@ -50,8 +50,15 @@ public static class InboxScan
     /// <summary>Whether any file is in it; false also when the folder itself cannot be listed.</summary>
     public static bool HoldsFiles(Inbox inbox)
     {
-        var holds = false;
-        return TryEach(inbox, (_, _) => holds = true) && holds;
+        try
+        {
+            using var files = new Walk(Path.TrimEndingDirectorySeparator(inbox.Path), (_, _) => { }, endsAtFirst: true);
+            return Directory.Exists(inbox.Path) && files.MoveNext();
+        }
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+        {
+            return false;
+        }
     }
 
     /// <summary>False for hidden files, lock files of office programs and names of copies under way.</summary>
@@ -69,7 +76,7 @@ public static class InboxScan
     }
 
     /// <summary>Everything happens while it walks; it lists nothing.</summary>
-    private sealed class Walk(string root, SeenPath each) : FileSystemEnumerator<bool>(root, Options)
+    private sealed class Walk(string root, SeenPath each, bool endsAtFirst = false) : FileSystemEnumerator<bool>(root, Options)
     {
         private char[] path = new char[1024];
 
@@ -78,6 +85,7 @@ public static class InboxScan
             if (!entry.IsDirectory && IsFinished(entry.FileName))
             {
                 Look(ref entry);
+                return endsAtFirst;
             }
 
             return false;

@@ -37,7 +37,10 @@ public static class SweepCommand
         {
             // Somebody is here who reads the clock: what it says from now on counts.
             new ClockGuard(workplace.Store).Note(now);
-            workplace.Store.Write(session => new ServiceNotices(workplace.Configuration, now).Decide(session, status));
+            if (workplace.Store.Write(session => new ServiceNotices(workplace.Configuration, now).Decide(session, status)) > 0)
+            {
+                new Deliveries(workplace.Store, Deliveries.Channels(workplace.Configuration), report).Run(now);
+            }
         }
 
         Print(report);

@@ -50,6 +50,9 @@ public static partial class LogMessages
     [LoggerMessage(EventId = 9105, EventName = "StatusFailed", Level = LogLevel.Warning, Message = "The status could not be put together; the next one tries again")]
     public static partial void StatusFailed(ILogger logger, Exception exception);
 
+    [LoggerMessage(EventId = 9106, EventName = "NotTold", Level = LogLevel.Warning, Message = "What stands wrong could not be told by notice: {Reason}")]
+    public static partial void NotTold(ILogger logger, string reason);
+
     [LoggerMessage(EventId = 9901, EventName = "SweepFailed", Level = LogLevel.Error, Message = "A sweep failed; the next one tries again")]
     public static partial void SweepFailed(ILogger logger, Exception exception);
 

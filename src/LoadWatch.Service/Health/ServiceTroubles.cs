@@ -34,13 +34,16 @@ public static class ServiceTroubles
         Mail(status, now),
         Disk(status),
         Behind(status, now),
-        status.ConfigurationFault is { } fault ? new Trouble("configuration", false, $"The configuration on disk is not in force: {fault.Split('\n')[0].TrimEnd()}") : null,
+        status.ConfigurationFault is { } fault ? new Trouble("configuration", false, $"The configuration on disk is not in force, by {PlaceOf(fault)}; loadwatch check tells why.") : null,
         Age(status.OldestWaiting, now) > WaitingMayTake ? new Trouble("arrivals-waiting", false, $"{status.Waiting} arrivals wait to be decoded, the oldest since {status.OldestWaiting}.") : null,
         status.WalBytes > LargestLog
             ? new Trouble("log-of-database", false, $"The database's write-ahead log has grown to {status.WalBytes / Megabyte} MB: some program keeps the database open and reads.")
             : null,
         status.Unreadable > 0 ? new Trouble("unreadable-files", false, $"Files or names that cannot be read: {status.Unreadable}; loadwatch sweep and the brief name them.") : null,
     ];
+
+    /// <summary>File and line of the first fault. Its text may quote a name or a value, and troubles are mailed.</summary>
+    private static string PlaceOf(string fault) => string.Join(':', fault.Split('\n')[0].Split(':').Take(2)) is var place && char.IsAsciiDigit(place[^1]) ? place : "a fault";
 
     private static Trouble? Failing(ServiceStatus status, Instant now) => status.Sweep is { FailingSince: { } since, Failure: var failure }
         ? new Trouble("sweeps-fail", Age(since, now) >= FailingForLong, $"Sweeps have failed since {since}: {failure ?? "the one under way tries again"}.")

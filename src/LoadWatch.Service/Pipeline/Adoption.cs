@@ -140,6 +140,12 @@ public sealed class Adoption
         }
 
         AskForRecordings(person, references.Append(FirstChangedHeartRate(person)).Min());
+        if (Changed(BasisParts.HeartRate, person))
+        {
+            // From then on ratings are converted, by pairs of all the time before.
+            session.People.MarkDirty(person, Beginning);
+        }
+
         if (references[1] is not null)
         {
             // By another reference value they may be their owner's, or no longer be.
@@ -150,8 +156,10 @@ public sealed class Adoption
 
     private void AskForRecordings(string person, LocalDate? from)
     {
-        if (from is { } date)
+        if (from is { } since)
         {
+            // "Never" in the roster is the first date that there is.
+            var date = LocalDate.Max(since, Beginning);
             session.Outdated.AddRecordings(person, date.PlusDays(-NearDays).AtMidnight().InUtc().ToInstant(), End);
             session.People.MarkDirty(person, date);
         }

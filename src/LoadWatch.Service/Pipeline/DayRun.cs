@@ -68,7 +68,7 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
     {
         var since = before!.Count == 0 ? LocalDate.MinIsoValue : first;
         var tests = session.TableRows.OfPerson(person.Id, RowKind.Tests, since, to).Select(row => new DatedTest(row.Date, (TestRow)row.Content)).ToList();
-        var counted = IsDone ? training.Activities.Where(activity => activity.Date <= through) : training.Activities;
+        var counted = training.Activities.Where(activity => activity.Date <= through);
         return PersonSeries.Continue(person, configuration.Groups[person.Group], before, [.. counted], tests, plans.Of(session, person, since, to), to);
     }
 

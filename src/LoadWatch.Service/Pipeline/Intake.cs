@@ -108,8 +108,11 @@ public sealed class Intake(
 
     private WaitingGroup RecordWaiting(StoreSession session, List<TakenFile> taken)
     {
-        var group = new WaitingGroup(taken);
-        foreach (var file in taken)
+        // One that has ended a child stays where it is: no process but a child may touch it until it is judged.
+        var suspects = taken.Where(file => session.Arrivals.Get(file.Copy.Sha) is { State: Recordings.ArrivalState.Waiting } arrival && Recovery.IsSuspect(arrival)).ToList();
+        suspects.ForEach(file => file.Copy.Dispose());
+        var group = new WaitingGroup([.. taken.Except(suspects)]);
+        foreach (var file in group.Taken)
         {
             var isNew = session.Arrivals.AddWaiting(file.Copy.Sha, null, file.Copy.Sha, file.Copy.Size);
             var isHarmless = isNew || session.Arrivals.Get(file.Copy.Sha) is not { } arrival || !Recovery.IsPoisonous(arrival);

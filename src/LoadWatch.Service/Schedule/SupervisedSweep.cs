@@ -1,6 +1,7 @@
 using LoadWatch.Service.Commands;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Health;
+using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 using Microsoft.Extensions.Hosting;
 using Microsoft.Extensions.Logging;
@@ -80,8 +81,29 @@ public sealed class SupervisedSweep(
         }
 
         SweepLog.Write(log, state, sweep.Report);
-        var status = statuses.Write(MachineClock.Now(clock));
-        workplace.Store.Write(session => new ServiceNotices(workplace.Configuration, now).Decide(session, status));
+        Tell(now, statuses.Write(MachineClock.Now(clock)));
+    }
+
+    /// <summary>What administrators have to know goes out with this sweep, not with the next.</summary>
+    private void Tell(Instant now, ServiceStatus status)
+    {
+        if (workplace.Store.Write(session => new ServiceNotices(workplace.Configuration, now).Decide(session, status)) > 0)
+        {
+            new Deliveries(workplace.Store, Deliveries.Channels(workplace.Configuration), new SweepReport { Advanced = heartbeat.Beat }).Run(now);
+        }
+    }
+
+    /// <summary>Where sweeps fail the reason may keep this from being told too; then the status file and the log do.</summary>
+    private void TryToTell(Instant now, ServiceStatus status)
+    {
+        try
+        {
+            Tell(now, status);
+        }
+        catch (Exception e) when (e is System.Data.Common.DbException or IOException or UnauthorizedAccessException or DurabilityLostException)
+        {
+            LogMessages.NotTold(log, e.Message);
+        }
     }
 
     private void WaitForTheClock(Instant now, string fault)
@@ -91,7 +113,7 @@ public sealed class SupervisedSweep(
             LogMessages.ClockBehind(log, fault);
         }
 
-        statuses.Write(now);
+        TryToTell(now, statuses.Write(now));
     }
 
     /// <summary>What may pass is tried again by the next sweep; damage does not pass, by a new start neither.</summary>
@@ -113,7 +135,8 @@ public sealed class SupervisedSweep(
                 break;
         }
 
-        statuses.Write(MachineClock.Now(clock));
+        var now = MachineClock.Now(clock);
+        TryToTell(now, statuses.Write(now));
         return failure.Trouble == StoreTrouble.Damaged;
     }
 

@@ -11,7 +11,7 @@ namespace LoadWatch.Service.Verifications;
 /// </summary>
 public sealed class DeepVerification(Workplace workplace, Action<string, int, int> progress)
 {
-    /// <returns>What differs; null where the rows were computed on another configuration or by another version, which a sweep mends first.</returns>
+    /// <returns>What differs; null where the rows were computed on another configuration or by another version, or wait to be: a sweep mends that first.</returns>
     public IReadOnlyList<Rot>? Run(CancellationToken cancel)
     {
         var aside = Path.Combine(workplace.Folder.Root, FormattableString.Invariant($"verify-{Environment.ProcessId}"));
@@ -20,9 +20,16 @@ public sealed class DeepVerification(Workplace workplace, Action<string, int, in
             var folder = DataFolder.Open(aside);
             workplace.Store.CopyTo(folder);
             using var copy = Store.Open(folder);
-            var before = copy.Read(session => session.Derived.ConfigHash());
+            var (before, behind) = copy.Read(session => (session.Derived.ConfigHash(), session.Outdated.Count()));
+            if (behind > 0)
+            {
+                return null;
+            }
+
+            // Of the copy: beside a service the store itself goes on.
+            var stored = Verification.Activities(copy, cancel).ToList();
             workplace.NewSweepOn(copy, MachineClock.Now()).Rebuild(cancel, (done, total) => progress("originals computed anew", done, total));
-            return before == copy.Read(session => session.Derived.ConfigHash()) ? Differences(copy, cancel) : null;
+            return before == copy.Read(session => session.Derived.ConfigHash()) ? Differences(stored, copy, cancel) : null;
         }
         finally
         {
@@ -33,10 +40,10 @@ public sealed class DeepVerification(Workplace workplace, Action<string, int, in
         }
     }
 
-    private List<Rot> Differences(Store copy, CancellationToken cancel)
+    private static List<Rot> Differences(IEnumerable<CheckedActivity> before, Store copy, CancellationToken cancel)
     {
         var found = new List<Rot>();
-        using var stored = Verification.Activities(workplace.Store, cancel).GetEnumerator();
+        using var stored = before.GetEnumerator();
         using var anew = Verification.Activities(copy, cancel).GetEnumerator();
         var (left, right) = (Next(stored), Next(anew));
         while (left is not null || right is not null)

@@ -88,16 +88,21 @@ public sealed class Verification(DataFolder folder, Store store, Action<string, 
     /// <summary>Which files and sessions a rotten object stands for, and which are missing altogether.</summary>
     private void NameSessions()
     {
-        var rotten = found.ToDictionary(rot => rot.What, StringComparer.Ordinal);
+        var rotten = found.Where(rot => rot.Advice == Advice.Object).ToDictionary(rot => rot.What, StringComparer.Ordinal);
         found.RemoveAll(rot => rot.Advice == Advice.Object);
-        var present = folder.Objects().Select(path => Path.GetFileName(path)).ToHashSet(StringComparer.Ordinal);
-        var named = store.Read(session => session.Arrivals.All()
-            .GroupBy(arrival => arrival.ObjectSha, StringComparer.Ordinal)
-            .Where(kept => rotten.ContainsKey(kept.Key) || !present.Contains(kept.Key))
-            .Select(kept => OriginalRot.Of(session, kept.Key, [.. kept], rotten.ContainsKey(kept.Key) ? Rotten : "it is missing"))
-            .ToList());
+        var named = store.Read(session =>
+        {
+            // In this order: an original is there before anything is known of it.
+            var arrivals = session.Arrivals.All();
+            var present = folder.Objects().Select(path => Path.GetFileName(path)).ToHashSet(StringComparer.Ordinal);
+            return arrivals
+                .GroupBy(arrival => arrival.ObjectSha, StringComparer.Ordinal)
+                .Where(kept => rotten.ContainsKey(kept.Key) || !present.Contains(kept.Key))
+                .Select(kept => OriginalRot.Of(session, kept.Key, [.. kept], rotten.ContainsKey(kept.Key) ? Rotten : "it is missing"))
+                .ToList();
+        });
         found.AddRange(named);
-        found.AddRange(rotten.Values.Where(rot => rot.Advice == Advice.Object && !named.Exists(known => known.What == rot.What))
+        found.AddRange(rotten.Values.Where(rot => !named.Exists(known => known.What == rot.What))
             .Select(rot => rot with { Sentence = $"Original {Short(rot.What)}, which nothing refers to: {Rotten}" }));
     }
 

@@ -81,7 +81,7 @@ public sealed class Archive(DataFolder folder)
     /// <inheritdoc cref="Open"/>
     public byte[] Read(string sha) => File.ReadAllBytes(PathOf(sha));
 
-    /// <summary>The object, read once; null where it is missing or no longer has the content it is named by.</summary>
+    /// <summary>The object, read once; null where it is missing, cannot be read or no longer has the content it is named by.</summary>
     public byte[]? ReadWhole(string sha)
     {
         try
@@ -89,7 +89,7 @@ public sealed class Archive(DataFolder folder)
             var bytes = Read(sha);
             return string.Equals(Convert.ToHexStringLower(SHA256.HashData(bytes)), sha, StringComparison.Ordinal) ? bytes : null;
         }
-        catch (FileNotFoundException)
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
         {
             return null;
         }

@@ -32,6 +32,9 @@ public abstract class Dialect
     /// <summary>Brings erased content out of the side files too. False when a reader was in the way.</summary>
     public abstract bool Checkpoint(DbConnection connection);
 
+    /// <summary>Closing the connection then leaves the log as it is: nothing is written over a disk that has lost something.</summary>
+    public abstract void LeaveLog(DbConnection connection);
+
     /// <summary>Copies the whole database as it is at one moment, while others write, into a file that must not be there yet.</summary>
     public abstract void CopyTo(DbConnection connection, string path);
 

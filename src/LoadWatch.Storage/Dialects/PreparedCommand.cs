@@ -8,9 +8,10 @@ namespace LoadWatch.Storage.Dialects;
 internal sealed class PreparedCommand(PreparedConnection connection) : DbCommand
 {
     /// <summary>Holds the parameters: who fills them in may change the text meanwhile, as Dapper does to write a list out.</summary>
-    private readonly DbCommand given = connection.Inner.CreateCommand();
+    private readonly DbCommand given = connection.TakeHolder();
 
     private DbCommand? inner;
+    private bool isDisposed;
 
     [AllowNull]
     public override string CommandText { get; set; } = "";
@@ -51,10 +52,11 @@ internal sealed class PreparedCommand(PreparedConnection connection) : DbCommand
 
     protected override void Dispose(bool disposing)
     {
-        if (disposing)
+        if (disposing && !isDisposed)
         {
+            isDisposed = true;
             GiveBack();
-            given.Dispose();
+            connection.GiveBackHolder(given);
         }
 
         base.Dispose(disposing);

@@ -14,6 +14,7 @@ internal sealed class PreparedConnection(DbConnection inner) : DbConnection
     private const int MostKept = 256;
 
     private readonly Dictionary<string, DbCommand> idle = new(StringComparer.Ordinal);
+    private readonly Stack<DbCommand> holders = [];
 
     /// <summary>The connection of the provider.</summary>
     public DbConnection Inner => inner;
@@ -45,6 +46,11 @@ internal sealed class PreparedConnection(DbConnection inner) : DbConnection
         }
 
         idle.Clear();
+        while (holders.TryPop(out var holder))
+        {
+            holder.Dispose();
+        }
+
         inner.Close();
     }
 
@@ -69,6 +75,15 @@ internal sealed class PreparedConnection(DbConnection inner) : DbConnection
         {
             command.Dispose();
         }
+    }
+
+    /// <summary>A command without a text that holds parameters. To be given back.</summary>
+    internal DbCommand TakeHolder() => holders.TryPop(out var holder) ? holder : inner.CreateCommand();
+
+    internal void GiveBackHolder(DbCommand holder)
+    {
+        holder.Parameters.Clear();
+        holders.Push(holder);
     }
 
     protected override DbTransaction BeginDbTransaction(IsolationLevel isolationLevel) => inner.BeginTransaction(isolationLevel);

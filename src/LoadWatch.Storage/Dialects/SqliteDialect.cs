@@ -16,6 +16,9 @@ public sealed class SqliteDialect : Dialect
     private static readonly Version OldestSqlite = new(3, 51, 3);
 
     private const int NotADatabase = 26;
+
+    // SQLITE_DBCONFIG_NO_CKPT_ON_CLOSE.
+    private const int NoCheckpointOnClose = 1006;
     private const int IoErrorOnSync = 10 | (4 << 8);
     private const int IoErrorOnFolderSync = 10 | (5 << 8);
 
@@ -82,6 +85,12 @@ public sealed class SqliteDialect : Dialect
 
     public override bool LostDurability(DbException error) =>
         error is SqliteException { SqliteExtendedErrorCode: IoErrorOnSync or IoErrorOnFolderSync };
+
+    public override void LeaveLog(DbConnection connection)
+    {
+        var own = (SqliteConnection)((connection as PreparedConnection)?.Inner ?? connection);
+        _ = SQLitePCL.raw.sqlite3_db_config(own.Handle!, NoCheckpointOnClose, 1, out _);
+    }
 
     public override bool Checkpoint(DbConnection connection) => connection.ExecuteScalar<long>("PRAGMA wal_checkpoint(TRUNCATE)") == 0;
 

@@ -48,6 +48,18 @@ public sealed class PreparedConnectionTests : IDisposable
         Assert.Equal([1, 2, 3, 2, 4, 6, 3, 6, 9], products);
     }
 
+    /// <summary>The text changes while the values are filled in, and those before and behind the list stay.</summary>
+    [Fact]
+    public void AListOfAnyLengthIsWrittenOutBesideOtherValues()
+    {
+        const string select = "SELECT value FROM number WHERE value >= @first AND value IN @list AND word = @word ORDER BY value";
+        connection.Execute("INSERT INTO number (value, word) VALUES (1, 'a'), (2, 'a'), (3, 'a'), (4, 'b')");
+        foreach (var (list, found) in new (int[], long[])[] { ([1, 2, 3, 4], [2, 3]), ([], []), ([2], [2]), ([1, 3], [3]), ([3, 4, 2], [2, 3]) })
+        {
+            Assert.Equal(found, connection.Query<long>(select, new { first = 2, list, word = "a" }));
+        }
+    }
+
     [Fact]
     public void AStatementThatFailedWorksAgain()
     {
