@@ -37,10 +37,7 @@ public static class SweepCommand
         {
             // Somebody is here who reads the clock: what it says from now on counts.
             new ClockGuard(workplace.Store).Note(now);
-            if (workplace.Store.Write(session => new ServiceNotices(workplace.Configuration, now).Decide(session, status)) > 0)
-            {
-                new Deliveries(workplace.Store, Deliveries.Channels(workplace.Configuration), report).Run(now);
-            }
+            new ServiceNotices(workplace.Configuration, now).Tell(workplace.Store, status, report);
         }
 
         Print(report);

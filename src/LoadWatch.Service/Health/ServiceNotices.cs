@@ -1,6 +1,7 @@
 using LoadWatch.Notices;
 using LoadWatch.People;
 using LoadWatch.Service.Configuration;
+using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Services;
 using NodaTime;
@@ -14,6 +15,15 @@ namespace LoadWatch.Service.Health;
 public sealed class ServiceNotices(WorkingConfiguration configuration, Instant now)
 {
     private const string MailTrouble = "mail-not-leaving";
+
+    /// <summary>Decides, and delivers at once what was decided: the next sweep may be a night away.</summary>
+    public void Tell(Store store, ServiceStatus status, SweepReport report)
+    {
+        if (store.Write(session => Decide(session, status)) > 0)
+        {
+            new Deliveries(store, Deliveries.Channels(configuration), report).Run(now);
+        }
+    }
 
     /// <returns>How many were decided.</returns>
     public int Decide(StoreSession session, ServiceStatus status)

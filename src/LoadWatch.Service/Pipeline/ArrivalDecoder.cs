@@ -133,8 +133,10 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
 
     /// <summary>The content of a known arrival, read back from the archive: the object itself, or the member of it that has this hash.</summary>
     /// <exception cref="InvalidDataException">The archive does not hold it any more.</exception>
-    public ArrivalContent Read(Arrival arrival, string path) =>
-        ArrivalContent.Expand(decoders, arrival.ObjectSha, path, archive.Read(arrival.ObjectSha)).FirstOrDefault(content => content.Sha == arrival.Sha)
+    public ArrivalContent Read(Arrival arrival, string path) => Content(arrival, path, archive.Read(arrival.ObjectSha));
+
+    private ArrivalContent Content(Arrival arrival, string path, byte[] original) =>
+        ArrivalContent.Expand(decoders, arrival.ObjectSha, path, original).FirstOrDefault(content => content.Sha == arrival.Sha)
         ?? throw new InvalidDataException($"the archive object {arrival.ObjectSha[..12]} no longer holds {arrival.Sha[..12]}");
 
     /// <summary>What a stored table holds.</summary>
@@ -147,7 +149,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     {
         try
         {
-            return archive.Verify(arrival.ObjectSha) ? decoders.Decode(Read(arrival, "").Bytes).Recordings : [];
+            return archive.ReadWhole(arrival.ObjectSha) is { } bytes ? decoders.Decode(Content(arrival, "", bytes).Bytes).Recordings : [];
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException or InvalidDataException)
         {

@@ -84,14 +84,8 @@ public sealed class SupervisedSweep(
         Tell(now, statuses.Write(MachineClock.Now(clock)));
     }
 
-    /// <summary>What administrators have to know goes out with this sweep, not with the next.</summary>
-    private void Tell(Instant now, ServiceStatus status)
-    {
-        if (workplace.Store.Write(session => new ServiceNotices(workplace.Configuration, now).Decide(session, status)) > 0)
-        {
-            new Deliveries(workplace.Store, Deliveries.Channels(workplace.Configuration), new SweepReport { Advanced = heartbeat.Beat }).Run(now);
-        }
-    }
+    private void Tell(Instant now, ServiceStatus status) =>
+        new ServiceNotices(workplace.Configuration, now).Tell(workplace.Store, status, new SweepReport { Advanced = heartbeat.Beat });
 
     /// <summary>Where sweeps fail the reason may keep this from being told too; then the status file and the log do.</summary>
     private void TryToTell(Instant now, ServiceStatus status)
