@@ -30,6 +30,12 @@ public static class RunCommand
             workplace.Configuration.Inboxes.Count,
             workplace.Configuration.Contacts.Count,
             DateTimeZoneProviders.Tzdb.VersionId);
-        return await ServiceRun.ToTheEndAsync(host, cancel);
+        var code = await ServiceRun.ToTheEndAsync(host, cancel);
+        if (code == ExitCode.Ok)
+        {
+            workplace.Store.Settle();
+        }
+
+        return code;
     }
 }

@@ -40,6 +40,7 @@ public static class SweepCommand
             new ServiceNotices(workplace.Configuration, now).Tell(workplace.Store, status, report);
         }
 
+        workplace.Store.Settle();
         Print(report);
         return ExitCode.Ok;
     }

@@ -14,6 +14,9 @@ internal static partial class LinuxCalls
     public const int EmptyPath = 0x1000;
     public const int NoFollowAt = 0x100;
 
+    /// <summary>To list a folder and go into it: R_OK and X_OK.</summary>
+    public const int ToEnter = 4 | 1;
+
     /// <summary>SYNC_FILE_RANGE_WRITE.</summary>
     public const uint StartWriting = 2;
 
@@ -31,6 +34,9 @@ internal static partial class LinuxCalls
 
     [LibraryImport("libc", EntryPoint = "open", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
     public static partial int Open(string path, int flags);
+
+    [LibraryImport("libc", EntryPoint = "access", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
+    public static partial int Access(string path, int mode);
 
     [LibraryImport("libc", EntryPoint = "close", SetLastError = true)]
     public static partial int Close(int descriptor);
