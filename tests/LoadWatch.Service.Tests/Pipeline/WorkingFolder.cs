@@ -40,18 +40,7 @@ internal sealed class WorkingFolder : IDisposable
 
         """;
 
-    public const string Anchors = """
-        person,date,anchor,value,unit,source,exercise
-        anna,,heart_rate_rest,50,bpm,,
-        anna,,heart_rate_max,190,bpm,,
-        bo,,heart_rate_rest,55,bpm,,
-        bo,,heart_rate_max,185,bpm,,
-        bo,,critical_power,250,W,,
-        bo,,w_prime,20000,J,,
-        bo,,power_max,1100,W,,
-        cara,,heart_rate_rest,60,bpm,,
-
-        """;
+    public const string Anchors = SquadAnchors.Text;
 
     public string Root => root.FullName;
 
