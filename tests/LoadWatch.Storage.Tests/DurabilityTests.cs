@@ -243,6 +243,7 @@ public sealed class DurabilityTests : IDisposable
         using (var store = Store.Open(folder))
         {
             store.Write(session => Enumerable.Range(1, 500).ToList().ForEach(i => session.Arrivals.AddWaiting(Some.Sha(i), null, Some.Sha(i), 10)));
+            store.Settle();
         }
 
         using (var file = new FileStream(folder.DatabasePath, FileMode.Open))

@@ -31,8 +31,7 @@ public static class RebuildCommand
             });
         }
 
-        workplace.Store.Settle();
         Console.Out.WriteLine($"Rebuilt: {sweep.Report.Recomputed} arrivals, {sweep.Report.PeopleComputed} people.");
-        return ExitCode.Ok;
+        return workplace.Settled(ExitCode.Ok);
     }
 }

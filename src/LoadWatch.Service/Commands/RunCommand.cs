@@ -31,11 +31,6 @@ public static class RunCommand
             workplace.Configuration.Contacts.Count,
             DateTimeZoneProviders.Tzdb.VersionId);
         var code = await ServiceRun.ToTheEndAsync(host, cancel);
-        if (code == ExitCode.Ok)
-        {
-            workplace.Store.Settle();
-        }
-
-        return code;
+        return code == ExitCode.Ok ? workplace.Settled(code) : code;
     }
 }

@@ -40,9 +40,8 @@ public static class SweepCommand
             new ServiceNotices(workplace.Configuration, now).Tell(workplace.Store, status, report);
         }
 
-        workplace.Store.Settle();
         Print(report);
-        return ExitCode.Ok;
+        return workplace.Settled(ExitCode.Ok);
     }
 
     public static void Print(SweepReport report)

@@ -189,7 +189,9 @@ internal sealed class WorkingFolder : IDisposable
         var folder = DataFolder.Open(configuration.DataFolder);
         using var alone = InstanceLock.Take(folder);
         using var store = Store.Open(folder);
-        return work(new Sweep(configuration, folder, store, now ?? Now, probe ?? new NoProbe()) { RecomputesFor = recomputesFor ?? TimeSpan.MaxValue });
+        var report = work(new Sweep(configuration, folder, store, now ?? Now, probe ?? new NoProbe()) { RecomputesFor = recomputesFor ?? TimeSpan.MaxValue });
+        store.Settle();
+        return report;
     }
 
     private sealed class NoProbe : IDecodeProbe
