@@ -7,6 +7,7 @@ using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Files;
 using LoadWatch.Storage.Recordings;
+using LoadWatch.Tests;
 using NodaTime;
 
 namespace LoadWatch.Service.Tests.Pipeline;
