@@ -132,6 +132,7 @@ internal static class Errno
     public const int NoEntry = 2;
     public const int Interrupted = 4;
     public const int NoDevice = 6;
+    public const int WouldBlock = 11;
     public const int AccessDenied = 13;
     public const int Exists = 17;
     public const int NotAFolder = 20;
