@@ -10,7 +10,6 @@ namespace LoadWatch.Service.Tests.Pipeline;
 public sealed class DayCostTests
 {
     private const int MostRows = 1000;
-    private const int MostRowsAfterAChange = 2200;
 
     private static readonly LocalDate Last = new(2026, 6, 13);
 
@@ -27,13 +26,13 @@ public sealed class DayCostTests
 
     /// <summary>The days and histograms of the look-back before the change, and nothing that grows.</summary>
     [Theory]
-    [InlineData(20)]
-    [InlineData(300)]
-    public void AfterAChangedReferenceValueItReadsTheSessionsOfItsLookBackToo(int daysAgo)
+    [InlineData(20, 910)]
+    [InlineData(300, 1470)]
+    public void AfterAChangedReferenceValueItReadsTheSessionsOfItsLookBackToo(int daysAgo, int most)
     {
         var (two, four) = (RowsAfterAChange(2, daysAgo), RowsAfterAChange(4, daysAgo));
 
-        Assert.InRange(two, 1, MostRowsAfterAChange);
+        Assert.InRange(two, 1, most);
         Assert.Equal(two, four);
     }
 

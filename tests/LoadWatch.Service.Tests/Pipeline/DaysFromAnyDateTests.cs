@@ -71,7 +71,7 @@ public sealed class DaysFromAnyDateTests
         Assert.Contains(found, finding => finding is { Rule: "load_ratio", Quantity: "distance" });
         Assert.Contains(found, finding => Period.DaysBetween(finding.Since, finding.Date) > LoadCalendar.LookBackDays);
         Assert.Contains(found, finding => finding.Severity == Severity.Note);
-        Assert.Contains(found, finding => finding.Severity > Severity.Note && finding.Text.Contains(FindingsAcrossChange.Words, StringComparison.Ordinal));
+        Assert.Contains(found, finding => finding.Severity > Severity.Note && finding.Evidence.Inputs.Any(item => item.Name == "heart_rate_max_before"));
     }
 
     /// <summary>As a person's stretches are computed: each settled by the 7 days behind it.</summary>
