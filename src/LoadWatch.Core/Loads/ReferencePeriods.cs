@@ -19,6 +19,9 @@ public sealed class ReferencePeriods
     /// <summary>So far before a date sessions are wanted by its values: the look-back, and a month more so that what lies at its far end is whole.</summary>
     private const int ReachDays = 430;
 
+    /// <summary>A change so soon after a date asks for days before the look-back of that date. Days.</summary>
+    private const int AheadDays = 30;
+
     private static readonly LocalDate Beginning = LocalDate.MinIsoValue;
 
     private readonly List<ReferencePeriod> periods;
@@ -73,13 +76,13 @@ public sealed class ReferencePeriods
         .Order();
 
     /// <summary>
-    /// From when on sessions are wanted to compute a date and those after it; null: nothing changed within reach. A session that was converted before a change is
+    /// From when on sessions are wanted to compute a date and those after it; null: nothing changed within reach, or does soon. A session that was converted before a change is
     /// converted anew by the line of that date, which rests on the 12 months before it.
     /// </summary>
     public LocalDate? Reach(LocalDate date)
     {
-        var first = periods.Skip(1).FirstOrDefault(period => period.From > date.PlusDays(-ReachDays) && period.From <= date)?.From;
-        return (converts ? first : first is null ? null : date)?.PlusDays(-ReachDays);
+        var first = periods.Skip(1).FirstOrDefault(period => period.From > date.PlusDays(-ReachDays) && period.From <= date.PlusDays(AheadDays))?.From;
+        return first is { } change ? (converts ? LocalDate.Min(change, date) : date).PlusDays(-ReachDays) : null;
     }
 
     private static IReadOnlyList<AnchorKind> KindsOf(string quantity) => quantity switch

@@ -67,7 +67,8 @@ public class ReferencePeriodsTests
         var converts = ReferencePeriods.Of(Given.Person(), Squad with { LoadFallbacks = [QuantityNames.FosterLoad] }, Given.Anchors(Max(190), Max(180, 0)));
         var periods = Of(Given.Person(), Max(190), Max(180, 0));
 
-        Assert.Null(periods.Reach(Change.PlusDays(-1)));
+        Assert.Null(periods.Reach(Change.PlusDays(-31)));
+        Assert.Equal(Change.PlusDays(-30 - 430), converts.Reach(Change.PlusDays(-30)));
         Assert.Equal(Change.PlusDays(100 - 430), periods.Reach(Change.PlusDays(100)));
         Assert.Equal(Change.PlusDays(-430), converts.Reach(Change.PlusDays(100)));
         Assert.Null(periods.Reach(Change.PlusDays(430)));
