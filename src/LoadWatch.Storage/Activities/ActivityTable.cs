@@ -49,6 +49,11 @@ public sealed class ActivityTable
     private const string SelectOne = SelectActivities + " WHERE a.key = @key";
     private const string SelectHistograms = "SELECT activity, channel, bins FROM histogram WHERE activity >= @first AND activity <= @last ORDER BY activity, channel";
 
+    private const string SelectHistogramsOfPerson = """
+        SELECT h.activity, h.channel, h.bins FROM activity a JOIN histogram h ON h.activity = a.key
+        WHERE a.person = @person AND a.date >= @from AND a.date <= @to AND h.channel IN ('heart_rate', 'speed')
+        """;
+
     private readonly StoreSession session;
 
     internal ActivityTable(StoreSession session) => this.session = session;
@@ -100,6 +105,15 @@ public sealed class ActivityTable
     /// <summary>Time by value of every channel that has one.</summary>
     public IReadOnlyDictionary<Channel, Histogram> Histograms(string key) => session.Rows<HistogramRow>(SelectHistograms, new { first = key, last = key })
         .ToDictionary(row => Words<Channel>.Parse(row.Channel), row => HistogramCodec.Read(row.Bins));
+
+    /// <summary>Time by heart rate and by speed of a person's activities of the dates, both ends included, by key of the activity.</summary>
+    public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, Histogram>> Histograms(string person, LocalDate from, LocalDate to) =>
+        session.Rows<HistogramRow>(SelectHistogramsOfPerson, new { person, from, to })
+            .GroupBy(row => row.Activity, StringComparer.Ordinal)
+            .ToDictionary(
+                rows => rows.Key,
+                IReadOnlyDictionary<Channel, Histogram> (rows) => rows.ToDictionary(row => Words<Channel>.Parse(row.Channel), row => HistogramCodec.Read(row.Bins)),
+                StringComparer.Ordinal);
 
     /// <summary>How a person's activities were made whose winning recordings start in the range, both ends included, sorted by that start and by key.</summary>
     public IReadOnlyList<StoredMerge> Merges(string person, Instant from, Instant to) =>
