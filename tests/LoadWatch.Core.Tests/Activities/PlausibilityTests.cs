@@ -69,7 +69,7 @@ public class PlausibilityTests
         Reason(Given.Recording("soccer", SampleSeries.Empty), Given.Anchor(AnchorKind.SpeedMax, 8), Given.Anchor(AnchorKind.HeartRateMax, 190)));
 
     private static string? Reason(Recording recording, params Anchor[] anchors) =>
-        Plausibility.Of(recording, Given.Person(), Given.Anchors(anchors), Given.Date);
+        Plausibility.Of(new UsableRecording(recording, 0.5), Given.Person(), Given.Anchors(anchors), Given.Date);
 
     private static Recording Speeds(string sport, params (double, int)[] steps) =>
         Given.Recording(sport, Given.EverySecond((Channel.Speed, Given.Steps(steps))));
