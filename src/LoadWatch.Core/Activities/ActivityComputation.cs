@@ -48,7 +48,7 @@ public static class ActivityComputation
 
     /// <summary>Without what is too far above the person's maximum; where none is known all of it stays.</summary>
     private static UsableRecording UpToMaximum(UsableRecording cut, HeartRateMaximum? maximum, QualityLimits limits) =>
-        maximum is null ? cut : cut.WithHeartRateUpTo(maximum.Bpm + limits.AboveMaximumBpm);
+        maximum is null ? cut : cut.WithHeartRateUpTo(maximum.Bpm + limits.HeartRateAboveMaximumBpm);
 
     /// <summary>Where heart rate says nothing about the person's effort, it is as if it had not been recorded.</summary>
     private static Recording WithoutHeartRate(Recording recording) =>

@@ -80,13 +80,13 @@ internal sealed class JudgedRecording(Recording recording, QualityLimits limits)
     private void CutAgainstLoad(long[] times, double[] bpm, ReadingMarks marks)
     {
         var load = new LoadChange(Usable(Channel.Power), Usable(Channel.Speed));
-        FlatLine.Cut(times, bpm, limits.FlatSeconds, load, marks);
+        FlatLine.Cut(times, bpm, limits.HeartRateFlatSeconds, load, marks);
         if (load.IsKnown && Usable(Channel.Cadence) is { } cadence)
         {
-            CadenceLock.Cut(times, bpm, cadence, 1, limits.CadenceLockSeconds, load, marks);
+            CadenceLock.Cut(times, bpm, cadence, 1, limits.HeartRateOnCadenceSeconds, load, marks);
             if (recording.Sport.IsOnFoot)
             {
-                CadenceLock.Cut(times, bpm, cadence, 2, limits.CadenceLockSeconds, load, marks);
+                CadenceLock.Cut(times, bpm, cadence, 2, limits.HeartRateOnCadenceSeconds, load, marks);
             }
         }
     }

@@ -20,7 +20,7 @@ internal sealed record JumpLimits(double PerSecond, int LeastMilliseconds, int M
     /// </summary>
     public static JumpLimits? Of(Channel channel, QualityLimits limits) => channel switch
     {
-        Channel.HeartRate => new JumpLimits(limits.JumpBpmPerSecond, 1000, 5000, limits.JumpBpmInFiveSeconds, 20_000),
+        Channel.HeartRate => new JumpLimits(limits.HeartRateBpmPerSecond, 1000, 5000, limits.HeartRateBpmInFiveSeconds, 20_000),
         Channel.Speed => new JumpLimits(8, 500, 2000, double.PositiveInfinity, 5000),
         Channel.Distance => new JumpLimits(45, 1000, 10_000, double.PositiveInfinity, 5000),
         Channel.Altitude => new JumpLimits(30, 1000, 10_000, double.PositiveInfinity, 5000),

@@ -62,6 +62,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         var recordings = verdict.Person is { } owner ? cut.Select(usable => Compute(content.Sha, usable, configuration.People[owner], file.SourceName)) : [];
         return new DecodedArrival(content.Sha, file.Kind, verdict, recordings.ToList())
         {
+            Problems = Problems(file),
             Table = verdict.State == ArrivalState.Stored ? file.Table : null,
             Questions = verdict.State == ArrivalState.Stored && file.Table is not null ? RowsNotUsed(file.Problems) : [],
         };
@@ -74,6 +75,13 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         1 => [$"1 row is not used: {problems[0]}"],
         _ => [$"{problems.Count} rows are not used, the first two: {problems[0]}; {problems[1]}"],
     };
+
+    private static IReadOnlyList<string> Problems(DecodedFile file)
+    {
+        var more = file.Problems.Count - DecodedArrival.MostProblems;
+        var told = file.Problems.Take(DecodedArrival.MostProblems).Select(problem => problem.ToString());
+        return more > 0 ? [.. told, $"{more} more"] : [.. told];
+    }
 
     private static List<string> Subjects(DecodedFile file) =>
         [.. file.Recordings.Select(recording => recording.Subject).OfType<string>().Distinct(StringComparer.Ordinal)];
@@ -106,6 +114,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
             : new ArrivalVerdict(ArrivalState.Held, owned.Count == 0 ? "no recording with a date" : $"owner unknown: none of the {subjects.Count} people in it is in the roster", null);
         return new DecodedArrival(content.Sha, file.Kind, verdict, recordings)
         {
+            Problems = Problems(file),
             Questions = recordings.Count > 0 ? asked : [],
         };
     }
