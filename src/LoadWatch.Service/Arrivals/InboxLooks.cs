@@ -53,7 +53,7 @@ public sealed class InboxLooks(TimeSpan patience)
     private static InboxLook Look(Inbox inbox, WorkingConfiguration configuration, Store store, KnownFiles files, Action progress)
     {
         var before = store.Read(session => session.InboxRoots.Of(inbox.Name));
-        var known = files.Of(inbox.Name, store);
+        var known = inbox.Take == TakeMode.Move ? new KnownInbox() : files.Of(inbox.Name, store);
         try
         {
             if (AwayNow(inbox, before, known, progress) is { } reason)

@@ -46,7 +46,7 @@ public sealed class Sweep
         answers = new Answers(configuration, now);
         assigned = new AssignedFiles(configuration, store, reader, settlement, Report);
         tables = new Tables(configuration, store, decoder, Report);
-        recomputations = new Recomputations(store, reader, settlement, Report);
+        recomputations = new Recomputations(store, archive, reader, settlement, probe, Report);
         briefs = new Briefs(configuration, now, Report.Unreadable, Report.MissingInboxes);
     }
 
