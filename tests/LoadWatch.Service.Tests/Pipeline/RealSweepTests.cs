@@ -81,7 +81,8 @@ public sealed class RealSweepTests(RealSweep sweep) : IClassFixture<RealSweep>
     /// <summary>The stops told by the timer's own events are the difference of the totals that the device states, but for the second at either end.</summary>
     [Theory]
     [InlineData("r006.fit")]
-    [InlineData("r022.fit")]
+    [InlineData("r015.fit")]
+    [InlineData("r033.fit")]
     [InlineData("r042.fit")]
     public void TheTimeWithoutTimerIsTheDifferenceOfTheDevicesTotals(string name)
     {
