@@ -1,3 +1,4 @@
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Csv;
@@ -20,7 +21,7 @@ internal sealed class SampleColumns(int rowsAtMost)
         times[Count] = unixMilliseconds;
         for (var channel = 0; channel < values.Length; channel++)
         {
-            if (!double.IsNaN(readings[channel]))
+            if (CutMark.IsTaken(readings[channel]))
             {
                 (values[channel] ??= Empty())[Count] = readings[channel];
             }
