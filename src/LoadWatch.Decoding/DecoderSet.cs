@@ -40,7 +40,7 @@ public sealed class DecoderSet(IReadOnlyList<CsvLayout> layouts, ContainerLimits
     public Completeness CheckCompleteness(ReadOnlyMemory<byte> bytes) => Recognise(bytes.Span) switch
     {
         ContentKind.Fit => When(FitDecoder.CheckCompleteness(bytes.Span) == FitCompleteness.Complete),
-        ContentKind.Gzip => When(Gzip.Unpack(bytes, "", limits).Problems.Count == 0),
+        ContentKind.Gzip => When(Gzip.IsWhole(bytes, limits)),
         ContentKind.Zip => When(ZipDirectory.Read(bytes.Span, limits).Fault is null),
         _ => Completeness.NeedsSettling,
     };

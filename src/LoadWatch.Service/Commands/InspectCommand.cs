@@ -2,6 +2,7 @@ using System.CommandLine;
 using System.Security.Cryptography;
 using System.Text;
 using LoadWatch.Decoding;
+using LoadWatch.Decoding.Containers;
 using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
@@ -15,6 +16,7 @@ namespace LoadWatch.Service.Commands;
 /// <summary><c>loadwatch inspect</c>: what is in files; nothing is taken in.</summary>
 public static class InspectCommand
 {
+    // Without a configuration: the most that one can set.
     private const long LargestFileBytes = 512L * 1024 * 1024;
 
     public static Command Create()
@@ -56,8 +58,10 @@ public static class InspectCommand
 
     private static int Run(IEnumerable<string> names, bool json, string? configPath)
     {
-        var decoders = new DecoderSet(configPath is null ? Decoding.Csv.BuiltInLayouts.All : ConfigurationReader.Read(configPath).Layouts);
-        var lines = names.AsParallel().AsOrdered().SelectMany(name => Inspect(decoders, name)).AsSequential();
+        var configuration = configPath is null ? null : ConfigurationReader.Read(configPath);
+        var largest = configuration?.LargestFileBytes ?? LargestFileBytes;
+        var decoders = new DecoderSet(configuration?.Layouts ?? Decoding.Csv.BuiltInLayouts.All, ContainerLimits.For(largest));
+        var lines = names.AsParallel().AsOrdered().SelectMany(name => Inspect(decoders, name, largest)).AsSequential();
         using var output = new StreamWriter(Console.OpenStandardOutput(), new UTF8Encoding(false), 1 << 16);
         if (json)
         {
@@ -74,12 +78,12 @@ public static class InspectCommand
         return ExitCode.Ok;
     }
 
-    private static IEnumerable<InspectLine> Inspect(DecoderSet decoders, string name)
+    private static IEnumerable<InspectLine> Inspect(DecoderSet decoders, string name, long largest)
     {
         switch (SafeFile.Open(name))
         {
             case OpenedFile opened:
-                return Inspect(decoders, name, opened);
+                return Inspect(decoders, name, opened, largest);
             case UnopenedFile unopened:
                 return [InspectLine.Unreadable(name, unopened.Reason)];
             default:
@@ -87,13 +91,13 @@ public static class InspectCommand
         }
     }
 
-    private static IEnumerable<InspectLine> Inspect(DecoderSet decoders, string name, OpenedFile opened)
+    private static IEnumerable<InspectLine> Inspect(DecoderSet decoders, string name, OpenedFile opened, long largest)
     {
         using (opened)
         {
-            if (opened.Stamp.Size > LargestFileBytes)
+            if (opened.Stamp.Size > largest)
             {
-                return [InspectLine.Unreadable(name, $"larger than {LargestFileBytes / (1024 * 1024)} MB")];
+                return [InspectLine.Unreadable(name, $"larger than {largest / (1024 * 1024)} MB")];
             }
 
             if (ReadAll(opened) is not { } bytes)
