@@ -13,10 +13,22 @@ public static class CsvDecoder
     /// </summary>
     /// <param name="bytes">The whole file.</param>
     /// <param name="layouts">The layouts known.</param>
-    public static DecodedFile Decode(ReadOnlyMemory<byte> bytes, IReadOnlyList<CsvLayout> layouts)
+    public static DecodedFile Decode(ReadOnlyMemory<byte> bytes, IReadOnlyList<CsvLayout> layouts) => Decode(CsvSource.Of(bytes), layouts);
+
+    /// <inheritdoc cref="Decode(ReadOnlyMemory{byte}, IReadOnlyList{CsvLayout})"/>
+    /// <param name="open">Opens the file at its start; the stream can seek. It is opened several times and never held whole.</param>
+    /// <param name="layouts">The layouts known.</param>
+    /// <exception cref="IOException">The file could not be read.</exception>
+    public static DecodedFile Decode(Func<Stream> open, IReadOnlyList<CsvLayout> layouts)
+    {
+        ArgumentNullException.ThrowIfNull(open);
+        return Decode(new CsvSource(open), layouts);
+    }
+
+    private static DecodedFile Decode(CsvSource source, IReadOnlyList<CsvLayout> layouts)
     {
         ArgumentNullException.ThrowIfNull(layouts);
-        return LayoutChoice.Make(bytes, layouts) switch
+        return LayoutChoice.Make(source, layouts) switch
         {
             { Problem: { } problem } => new DecodedFile("csv", FileType: null, SourceName: null, [], [problem]),
             { Layout.Kind: CsvKind.Samples } samples => UnitOutliers.LeaveOut(new SampleReading(samples.Table!, samples.Layout!).Read()),

@@ -1,3 +1,4 @@
+using System.Text;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Csv;
@@ -18,6 +19,7 @@ internal sealed class SampleReading
     private readonly RowProblems problems = new();
     private readonly ReadingCells readings;
     private readonly SportCell sport;
+    private readonly byte[] timeName;
     private int goodRows;
 
     public SampleReading(CsvTable table, CsvLayout layout)
@@ -28,6 +30,7 @@ internal sealed class SampleReading
         subjects = new SampleSubjects(table, layout);
         readings = new ReadingCells(table, layout);
         sport = new SportCell(table, layout);
+        timeName = Encoding.UTF8.GetBytes(layout.Time.Column);
     }
 
     public DecodedFile Read()
@@ -117,7 +120,7 @@ internal sealed class SampleReading
             problems.Add(doubt);
         }
 
-        clock.Accept(time, subject.Clock, rows.Line);
+        clock.Accept(time, subject.Clock, rows);
         subject.Samples.Add(time.ToUnixTimeMilliseconds(), readings.Values);
         goodRows++;
         return null;
@@ -144,17 +147,26 @@ internal sealed class SampleReading
     /// <summary>
     /// For a row of column names in the middle: a warning where they are those of the first line, an error where they are others.
     /// </summary>
-    private Problem? NamesAgain(CsvRows rows)
+    private Problem? NamesAgain(CsvRows rows) => rows switch
     {
-        var cells = Enumerable.Range(0, rows.CellCount).Select(rows.Text).ToList();
-        return cells switch
+        _ when !HoldsTimeName(rows) => null,
+        _ when Enumerable.Range(0, rows.CellCount).Select(rows.Text).SequenceEqual(table.Names) =>
+            Refusal("the column names come again: rows above and below are taken as one session", rows.Line)
+                with { Severity = ProblemSeverity.Warning },
+        _ => Refusal("other column names begin here: two files in one", rows.Line),
+    };
+
+    private bool HoldsTimeName(CsvRows rows)
+    {
+        for (var index = 0; index < rows.CellCount; index++)
         {
-            _ when !cells.Contains(layout.Time.Column) => null,
-            _ when cells.SequenceEqual(table.Names) =>
-                Refusal("the column names come again: rows above and below are taken as one session", rows.Line)
-                    with { Severity = ProblemSeverity.Warning },
-            _ => Refusal("other column names begin here: two files in one", rows.Line),
-        };
+            if (rows[index].SequenceEqual(timeName))
+            {
+                return true;
+            }
+        }
+
+        return false;
     }
 
     private Problem? TooManyBad()
@@ -175,8 +187,7 @@ internal sealed class SampleReading
         List<Recording> recordings = [];
         foreach (var subject in subjects.InOrder.Where(one => one.Samples.Count > 0))
         {
-            var all = subject.Samples.ToSeries();
-            foreach (var series in subject.Name is null ? [all] : SessionGaps.Split(all))
+            foreach (var series in subject.Samples.ToSeries(subject.Name is null ? null : SessionGaps.Sessions))
             {
                 recordings.Add(ToRecording(recordings.Count + 1, subject, series));
             }
