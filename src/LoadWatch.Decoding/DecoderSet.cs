@@ -55,6 +55,9 @@ public sealed class DecoderSet(IReadOnlyList<CsvLayout> layouts, ContainerLimits
         _ => Refused("unknown", bytes.IsEmpty ? "the file is empty" : "not a FIT, CSV, gzip or zip file"),
     };
 
+    /// <inheritdoc cref="CsvDecoder.Read"/>
+    public CsvReadThrough ReadText(Func<Stream> open, Action<Recording> take) => CsvDecoder.Read(open, layouts, take);
+
     /// <summary>Unpacks a gzip or zip file; its members are contents of their own.</summary>
     /// <param name="bytes">The whole content.</param>
     /// <param name="name">The name of the content: a gzip file's member is called the same without <c>.gz</c>.</param>

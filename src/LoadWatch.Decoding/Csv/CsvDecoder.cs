@@ -15,14 +15,27 @@ public static class CsvDecoder
     /// <param name="layouts">The layouts known.</param>
     public static DecodedFile Decode(ReadOnlyMemory<byte> bytes, IReadOnlyList<CsvLayout> layouts) => Decode(CsvSource.Of(bytes), layouts);
 
-    /// <inheritdoc cref="Decode(ReadOnlyMemory{byte}, IReadOnlyList{CsvLayout})"/>
+    /// <summary>
+    /// Reads a CSV of any size in flat memory: each recording of a person is handed on as it ends, numbered in that order. The rows of a person must
+    /// stand in the order of time as far as sessions go, and speeds in another unit are not told. A table is read whole.
+    /// </summary>
     /// <param name="open">Opens the file at its start; the stream can seek. It is opened several times and never held whole.</param>
     /// <param name="layouts">The layouts known.</param>
+    /// <param name="take">Gets the recordings. They count only if the answer is not refused, which is known at the end.</param>
     /// <exception cref="IOException">The file could not be read.</exception>
-    public static DecodedFile Decode(Func<Stream> open, IReadOnlyList<CsvLayout> layouts)
+    public static CsvReadThrough Read(Func<Stream> open, IReadOnlyList<CsvLayout> layouts, Action<Recording> take)
     {
         ArgumentNullException.ThrowIfNull(open);
-        return Decode(new CsvSource(open), layouts);
+        ArgumentNullException.ThrowIfNull(take);
+        var source = new CsvSource(open);
+        if (LayoutChoice.Make(source, layouts) is not { Layout: { Kind: CsvKind.Samples } layout, Table: { } table })
+        {
+            var file = Decode(source, layouts);
+            return new CsvReadThrough(file, file.Table is null);
+        }
+
+        var reading = new SampleReading(table, layout, take);
+        return new CsvReadThrough(reading.Read(), reading.IsRefused);
     }
 
     private static DecodedFile Decode(CsvSource source, IReadOnlyList<CsvLayout> layouts)
@@ -36,3 +49,8 @@ public static class CsvDecoder
         };
     }
 }
+
+/// <summary>What came of reading a CSV through.</summary>
+/// <param name="File">Without the recordings, which were handed on.</param>
+/// <param name="IsRefused">The file cannot be used, and what was handed on does not count.</param>
+public sealed record CsvReadThrough(DecodedFile File, bool IsRefused);

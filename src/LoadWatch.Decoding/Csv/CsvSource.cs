@@ -10,6 +10,7 @@ internal sealed class CsvSource(Func<Stream> open)
     private const int BufferBytes = 64 * 1024;
 
     private readonly Lazy<byte[]> head = new(() => HeadOf(open));
+    private readonly Lazy<long> length = new(() => LengthOf(open));
     private readonly Lazy<bool> isUtf8 = new(() => IsValid(open));
 
     public static CsvSource Of(ReadOnlyMemory<byte> bytes) => new(() => AsStream(bytes));
@@ -19,6 +20,9 @@ internal sealed class CsvSource(Func<Stream> open)
 
     /// <summary>Whether all of it is valid UTF-8. The first to ask reads all of it.</summary>
     public bool IsUtf8 => isUtf8.Value;
+
+    /// <summary>Bytes of all of it.</summary>
+    public long Length => length.Value;
 
     /// <param name="skipped">Bytes of the start that are left out.</param>
     public Stream Open(int skipped)
@@ -33,6 +37,12 @@ internal sealed class CsvSource(Func<Stream> open)
         using var stream = open();
         var bytes = new byte[HeadLength];
         return bytes[..stream.ReadAtLeast(bytes, HeadLength, throwOnEndOfStream: false)];
+    }
+
+    private static long LengthOf(Func<Stream> open)
+    {
+        using var stream = open();
+        return stream.Length;
     }
 
     private static bool IsValid(Func<Stream> open)
@@ -58,13 +68,13 @@ internal sealed class CsvSource(Func<Stream> open)
     /// <summary>How many bytes at the end begin a character whose other bytes are still to come.</summary>
     private static int UnfinishedTail(ReadOnlySpan<byte> bytes)
     {
-        for (var length = 1; length <= Math.Min(3, bytes.Length); length++)
+        for (var taken = 1; taken <= Math.Min(3, bytes.Length); taken++)
         {
-            var first = bytes[^length];
+            var first = bytes[^taken];
             if ((first & 0xC0) != 0x80)
             {
                 var wanted = first switch { >= 0xF0 => 4, >= 0xE0 => 3, >= 0xC0 => 2, _ => 1 };
-                return wanted > length ? length : 0;
+                return wanted > taken ? taken : 0;
             }
         }
 

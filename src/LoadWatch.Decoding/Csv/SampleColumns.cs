@@ -10,11 +10,15 @@ internal sealed class SampleColumns
 
     public int Count { get; private set; }
 
+    /// <summary>The latest time, milliseconds since 1970; null without a row.</summary>
+    public long? Latest { get; private set; }
+
     /// <param name="unixMilliseconds">Time of the row.</param>
     /// <param name="readings">By channel number; NaN for none.</param>
     public void Add(long unixMilliseconds, ReadOnlySpan<double> readings)
     {
         times.Set(Count, unixMilliseconds);
+        Latest = Latest > unixMilliseconds ? Latest : unixMilliseconds;
         for (var channel = 0; channel < values.Length; channel++)
         {
             if (!double.IsNaN(readings[channel]))

@@ -99,5 +99,18 @@ internal sealed class SampleSubject(string? name, byte[] cell)
 
     public ClockTrack Clock { get; } = new();
 
-    public SampleColumns Samples { get; } = new();
+    /// <summary>The rows of the session under way, or of all that are not handed on yet.</summary>
+    public SampleColumns Samples { get; private set; } = new();
+
+    /// <summary>The latest row handed on, milliseconds since 1970; null before the first.</summary>
+    public long? EndedAt { get; private set; }
+
+    /// <inheritdoc cref="SampleColumns.ToSeries"/>
+    public IReadOnlyList<SampleSeries> End(Func<long[], IReadOnlyList<int[]>?>? sessionsOf)
+    {
+        EndedAt = Samples.Latest;
+        var ended = Samples;
+        Samples = new SampleColumns();
+        return ended.ToSeries(sessionsOf);
+    }
 }

@@ -4,10 +4,12 @@ namespace LoadWatch.Decoding.Csv;
 internal static class SessionGaps
 {
     /// <summary>A choice: longer than a half-time or a wait on the bench, shorter than the time between two sessions.</summary>
-    private const long LongestMilliseconds = 60 * 60_000;
+    public const long LongestMilliseconds = 60 * 60_000;
 
     /// <summary>The rows of each session, by time; within one they keep the order of the file. Every row is in exactly one. Null for a single session.</summary>
-    public static IReadOnlyList<int[]>? Sessions(long[] times)
+    /// <param name="times">Of the rows, milliseconds.</param>
+    /// <param name="most">Of more sessions no more than one beyond it are told apart.</param>
+    public static IReadOnlyList<int[]>? Sessions(long[] times, int most)
     {
         if (IsOne(times))
         {
@@ -15,7 +17,7 @@ internal static class SessionGaps
         }
 
         var order = ByTime(times);
-        var starts = Starts(times, order);
+        var starts = Starts(times, order, most);
         return starts.Count == 1 ? null : [.. starts.Select((start, i) => OfFile(order[start..(i + 1 < starts.Count ? starts[i + 1] : order.Length)]))];
     }
 
@@ -40,10 +42,10 @@ internal static class SessionGaps
         return order;
     }
 
-    private static List<int> Starts(long[] times, int[] order)
+    private static List<int> Starts(long[] times, int[] order, int most)
     {
         List<int> starts = [0];
-        for (var place = 1; place < order.Length; place++)
+        for (var place = 1; place < order.Length && starts.Count <= most; place++)
         {
             if (times[order[place]] - times[order[place - 1]] > LongestMilliseconds)
             {

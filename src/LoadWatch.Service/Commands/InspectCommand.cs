@@ -19,6 +19,9 @@ public static class InspectCommand
     // Without a configuration: the most that one can set.
     private const long LargestFileBytes = 512L * 1024 * 1024;
 
+    // Larger ones that are text are read as a stream, whatever their size.
+    private const long HeldWholeBytes = 32L * 1024 * 1024;
+
     public static Command Create()
     {
         var files = new Argument<string[]>("files") { Description = "FIT or CSV files, also in gzip or zip.", Arity = ArgumentArity.ZeroOrMore };
@@ -95,6 +98,11 @@ public static class InspectCommand
     {
         using (opened)
         {
+            if (opened.Stamp.Size > HeldWholeBytes && IsText(opened.Stream))
+            {
+                return Through(decoders, name);
+            }
+
             if (opened.Stamp.Size > largest)
             {
                 return [InspectLine.Unreadable(name, $"larger than {largest / (1024 * 1024)} MB")];
@@ -107,6 +115,32 @@ public static class InspectCommand
 
             var sha = Convert.ToHexStringLower(SHA256.HashData(bytes));
             return ArrivalContent.Expand(decoders, sha, name, bytes).SelectMany(content => Of(decoders, content)).ToList();
+        }
+    }
+
+    private static bool IsText(FileStream stream)
+    {
+        var head = new byte[DecoderSet.HeadLength];
+        var length = stream.ReadAtLeast(head, head.Length, throwOnEndOfStream: false);
+        stream.Position = 0;
+        return DecoderSet.Recognise(head.AsSpan(0, length)) == ContentKind.Text;
+    }
+
+    /// <summary>A large CSV, of which no more is held than the sessions under way.</summary>
+    private static IEnumerable<InspectLine> Through(DecoderSet decoders, string name)
+    {
+        var unknown = new DecodedFile("csv", FileType: null, SourceName: null, [], []);
+        var lines = new List<InspectLine>();
+        try
+        {
+            var (file, isRefused) = decoders.ReadText(() => SafeFile.Reopen(name), recording => lines.Add(InspectLine.Of(name, unknown, recording)));
+            return isRefused || lines.Count == 0
+                ? [InspectLine.WithoutRecording(name, file.Kind, file.Problems) with { Table = TableText(file.Table) }]
+                : lines.ConvertAll(line => line with { Problems = [.. file.Problems.Select(ProblemLine.Of)] });
+        }
+        catch (IOException)
+        {
+            return [InspectLine.Unreadable(name, "it could not be read to its end")];
         }
     }
 

@@ -23,13 +23,13 @@ public static class LayoutCommand
 
     private static int Run(string path, string? name, bool json)
     {
-        if (Trouble(path) is { } trouble)
+        if (Trouble(path) is var (code, trouble))
         {
             Console.Error.WriteLine($"{OneLine.Of(path)}: {trouble}");
-            return ExitCode.Data;
+            return code;
         }
 
-        var draft = LayoutDrafting.Of(() => Open(path), name ?? Path.GetFileNameWithoutExtension(path));
+        var draft = LayoutDrafting.Of(() => SafeFile.Reopen(path), name ?? Path.GetFileNameWithoutExtension(path));
         if (draft.Problem is { } problem)
         {
             Console.Error.WriteLine($"{OneLine.Of(path)}: {OneLine.Of(problem.ToString())}");
@@ -40,27 +40,26 @@ public static class LayoutCommand
         return ExitCode.Ok;
     }
 
-    /// <summary>Why the content is no CSV to look at, or null.</summary>
-    private static string? Trouble(string path)
+    /// <summary>Why there is no CSV to look at, with its exit code; or null.</summary>
+    private static (int Code, string Reason)? Trouble(string path)
     {
-        using var stream = Open(path);
-        var head = new byte[DecoderSet.HeadLength];
-        return DecoderSet.Recognise(head.AsSpan(0, stream.ReadAtLeast(head, head.Length, throwOnEndOfStream: false))) switch
+        if (SafeFile.Open(path) is not OpenedFile opened)
         {
-            ContentKind.Text => null,
-            ContentKind.Gzip or ContentKind.Zip => "packed: unpack it first",
-            ContentKind.Fit => "a FIT file: it needs no layout",
-            _ => "no text, or empty",
-        };
-    }
+            return (ExitCode.InputOutput, "it cannot be opened, or is no file");
+        }
 
-    /// <exception cref="IOException">It cannot be opened.</exception>
-    private static FileStream Open(string path) => SafeFile.Open(path) switch
-    {
-        OpenedFile opened => opened.Stream,
-        UnopenedFile unopened => throw new IOException($"{OneLine.Of(path)}: {unopened.Reason}"),
-        _ => throw new InvalidOperationException("a file is opened or not"),
-    };
+        using (opened)
+        {
+            var head = new byte[DecoderSet.HeadLength];
+            return DecoderSet.Recognise(head.AsSpan(0, opened.Stream.ReadAtLeast(head, head.Length, throwOnEndOfStream: false))) switch
+            {
+                ContentKind.Text => null,
+                ContentKind.Gzip or ContentKind.Zip => (ExitCode.Data, "packed: unpack it first"),
+                ContentKind.Fit => (ExitCode.Data, "a FIT file: it needs no layout"),
+                _ => (ExitCode.Data, "no text, or empty"),
+            };
+        }
+    }
 
     /// <summary>JSON with comments, as the configuration takes it.</summary>
     private static string Text(string path, LayoutDraft draft) =>

@@ -16,6 +16,7 @@ namespace LoadWatch.Service.Pipeline;
 public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSet decoders, Archive archive, Instant now)
 {
     private readonly MemberPlaces places = new(decoders);
+    private readonly LastOriginal originals = new(archive);
 
     /// <summary>What tables say that recordings are computed with; the sweep keeps it up to date.</summary>
     public TableBasis Basis { get; set; } = TableBasis.Of(configuration);
@@ -151,7 +152,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     {
         try
         {
-            return archive.ReadWhole(arrival.ObjectSha) is { } bytes ? decoders.Decode(Content(arrival, "", bytes).Bytes).Recordings : [];
+            return originals.ReadWhole(arrival.ObjectSha) is { } bytes ? decoders.Decode(Content(arrival, "", bytes).Bytes).Recordings : [];
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException or InvalidDataException)
         {
