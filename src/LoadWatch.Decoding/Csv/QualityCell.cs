@@ -42,7 +42,8 @@ internal sealed class QualityCell(CsvTable table, CsvQuality wanted, char decima
     public Problem? Take(CsvRows rows, double[] readings)
     {
         var value = double.NaN;
-        if (!rows[column].IsEmpty && !StrictNumber.TryRead(rows[column], decimalMark, out value))
+        var cell = rows[column];
+        if (!cell.IsEmpty && !StrictNumber.TryRead(cell, decimalMark, out value))
         {
             return table.Wrong(rows, column, $"not a number with the decimal mark {decimalMark}");
         }

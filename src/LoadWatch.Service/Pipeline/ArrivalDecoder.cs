@@ -15,6 +15,9 @@ namespace LoadWatch.Service.Pipeline;
 /// <summary>From bytes to a judged arrival with all its values. Pure but for reading the archive; safe to use from several threads.</summary>
 public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSet decoders, Archive archive, Instant now)
 {
+    private readonly MemberPlaces places = new(decoders);
+    private readonly LastOriginal originals = new(archive);
+
     /// <summary>What tables say that recordings are computed with; the sweep keeps it up to date.</summary>
     public TableBasis Basis { get; set; } = TableBasis.Of(configuration);
 
@@ -148,7 +151,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     public ArrivalContent Read(Arrival arrival, string path) => Content(arrival, path, archive.Read(arrival.ObjectSha));
 
     private ArrivalContent Content(Arrival arrival, string path, byte[] original) =>
-        ArrivalContent.Expand(decoders, arrival.ObjectSha, path, original).FirstOrDefault(content => content.Sha == arrival.Sha)
+        places.Find(arrival.ObjectSha, path, original, arrival.Sha)
         ?? throw new InvalidDataException($"the archive object {arrival.ObjectSha[..12]} no longer holds {arrival.Sha[..12]}");
 
     /// <summary>What a stored table holds.</summary>
@@ -161,7 +164,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     {
         try
         {
-            return archive.ReadWhole(arrival.ObjectSha) is { } bytes ? decoders.Decode(Content(arrival, "", bytes).Bytes).Recordings : [];
+            return originals.ReadWhole(arrival.ObjectSha) is { } bytes ? decoders.Decode(Content(arrival, "", bytes).Bytes).Recordings : [];
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException or InvalidDataException)
         {

@@ -1,4 +1,5 @@
 using LoadWatch.Decoding;
+using LoadWatch.Decoding.Containers;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
@@ -36,7 +37,7 @@ public sealed class Sweep
         this.now = now;
         this.known = known ?? new KnownFiles();
         var archive = new Archive(folder);
-        var decoders = new DecoderSet(configuration.Layouts);
+        var decoders = new DecoderSet(configuration.Layouts, ContainerLimits.For(configuration.LargestFileBytes));
         decoder = new ArrivalDecoder(configuration, decoders, archive, now);
         var reader = new ArchiveReader(store, archive, decoders);
         settlement = new Settlement(configuration, store, decoder, Report);
