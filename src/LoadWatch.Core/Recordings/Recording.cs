@@ -39,6 +39,9 @@ public sealed record Recording
     /// <summary>Beats delivered in messages of their own (chest straps under water), in time order; not merged into the samples.</summary>
     public IReadOnlyList<TimedHeartRate> LateHeartRates { get; init; } = [];
 
+    /// <summary>Milliseconds from beat to beat in the order of the file, 1 to 65534; empty where the device kept none.</summary>
+    public IReadOnlyList<int> BeatIntervals { get; init; } = [];
+
     public IReadOnlyList<StrengthSet> Sets { get; init; } = [];
 
     /// <summary>Stretches during which the timer stood, in time order.</summary>

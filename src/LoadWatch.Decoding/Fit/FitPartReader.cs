@@ -106,7 +106,7 @@ internal sealed class FitPartReader
         else if (plan.Message == FitMessages.FieldDescription)
             developer.Describe(new FitMessage(plan, payload));
         else if (FitMessages.IsRead(plan.Message))
-            Content.Read(new FitMessage(plan, payload), plan.Message, time);
+            Content.Read(new FitMessage(plan, payload), plan.Message, plan.Message == FitMessages.BeatIntervals ? clock * 1000L : time);
 
         CheckBudget();
     }

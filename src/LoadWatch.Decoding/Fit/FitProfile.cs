@@ -11,6 +11,7 @@ internal static class FitMessages
     public const int Event = 21;
     public const int DeviceInfo = 23;
     public const int Activity = 34;
+    public const int BeatIntervals = 78;
     public const int Length = 101;
     public const int HeartRate = 132;
     public const int TimestampCorrelation = 162;
@@ -20,7 +21,7 @@ internal static class FitMessages
 
     /// <summary>Whether the decoder reads more of it than its length and its time.</summary>
     public static bool IsRead(int message) => message is FileId or Sport or Session or Lap or Record or Event or DeviceInfo
-        or Activity or Length or HeartRate or TimestampCorrelation or FieldDescription or Set;
+        or Activity or BeatIntervals or Length or HeartRate or TimestampCorrelation or FieldDescription or Set;
 }
 
 /// <summary>Field numbers, by message.</summary>
@@ -93,6 +94,12 @@ internal static class FitFields
         public const byte LocalTimestamp = 5;
     }
 
+    public static class BeatIntervals
+    {
+        /// <summary>Several in one message, unused places without a value.</summary>
+        public const byte Milliseconds = 0;
+    }
+
     public static class HeartRate
     {
         /// <summary>1/32768 s.</summary>
@@ -110,6 +117,7 @@ internal static class FitFields
     public static class TimestampCorrelation
     {
         public const byte SystemTimestamp = 1;
+        public const byte LocalTimestamp = 3;
     }
 
     public static class FieldDescription

@@ -30,6 +30,9 @@ internal sealed class PartContent(MemoryBudget budget)
 
     public List<long?> Lengths { get; } = [];
 
+    /// <summary>Times from beat to beat with the last time before them in the file; they carry none of their own.</summary>
+    public List<(long? Time, int Milliseconds)> Intervals { get; } = [];
+
     public TimerPauses Pauses { get; } = new();
 
     public SampleColumns Samples { get; } = new(budget);
@@ -66,6 +69,9 @@ internal sealed class PartContent(MemoryBudget budget)
             case FitMessages.Length:
                 Keep(Lengths, message.Time(FitFields.Lap.Start) ?? time, SmallCost);
                 break;
+            case FitMessages.BeatIntervals:
+                ReadIntervals(message, time);
+                break;
             case FitMessages.Event:
                 Pauses.Read(message, time);
                 budget.Spend(SmallCost);
@@ -77,10 +83,11 @@ internal sealed class PartContent(MemoryBudget budget)
                 Late.Read(message);
                 break;
             case FitMessages.Activity:
-                ReadActivity(message, time);
+                LocalOffsetSeconds = OffsetOf(time, message.Time(FitFields.Activity.LocalTimestamp)) ?? LocalOffsetSeconds;
                 break;
             case FitMessages.TimestampCorrelation:
                 Clock = Clock.Correlated(time, message.Time(FitFields.TimestampCorrelation.SystemTimestamp));
+                LocalOffsetSeconds ??= OffsetOf(time, message.Time(FitFields.TimestampCorrelation.LocalTimestamp));
                 break;
         }
     }
@@ -142,14 +149,24 @@ internal sealed class PartContent(MemoryBudget budget)
         Keep(Sets, (start, set), SetCost);
     }
 
-    private void ReadActivity(in FitMessage message, long? time)
+    private void ReadIntervals(in FitMessage message, long? time)
     {
-        if (!FitClock.IsDate(time) || message.Time(FitFields.Activity.LocalTimestamp) is not { } local)
-            return;
+        var bytes = message.Values(FitFields.BeatIntervals.Milliseconds, sizeof(ushort));
+        for (; bytes.Length > 0; bytes = bytes[sizeof(ushort)..])
+        {
+            if (FitNumber.UInt16(bytes, message.BigEndian) is var milliseconds and > 0 and < ushort.MaxValue)
+                Keep(Intervals, (time, (int)milliseconds), SmallCost);
+        }
+    }
 
-        var seconds = (long)Math.Round((local - time!.Value) / (1000.0 * Quarter)) * Quarter;
-        if (Math.Abs(seconds) <= MostOffsetSeconds)
-            LocalOffsetSeconds = (int)seconds;
+    /// <summary>The quarter of an hour that a local time is ahead of the date it belongs to; null where either is no date or no zone is so far off.</summary>
+    private static int? OffsetOf(long? time, long? local)
+    {
+        if (!FitClock.IsDate(time) || local is null)
+            return null;
+
+        var seconds = (long)Math.Round((local.Value - time!.Value) / (1000.0 * Quarter)) * Quarter;
+        return Math.Abs(seconds) <= MostOffsetSeconds ? (int)seconds : null;
     }
 }
 

@@ -30,6 +30,7 @@ internal sealed class PartRecordings
         var laps = Shared(content.Laps, lap => lap);
         var lengths = Shared(content.Lengths, length => length);
         var pauses = Shared(content.Pauses.All, pause => pause.Start);
+        var intervals = Shared(content.Intervals, interval => interval.Time);
         var beats = Shared(content.Late.Beats, beat => beat.Time);
         return [.. sessions.Select((session, i) => Basics(session, samples[i]) with
         {
@@ -39,6 +40,7 @@ internal sealed class PartRecordings
             Lengths = lengths[i].Count,
             Pauses = Pauses(pauses[i], samples[i]),
             LateHeartRates = Beats(beats[i]),
+            BeatIntervals = [.. intervals[i].Select(interval => interval.Milliseconds)],
         })];
     }
 

@@ -1,0 +1,87 @@
+using LoadWatch.Decoding.Fit;
+
+namespace LoadWatch.Decoding.References;
+
+/// <summary>fit-file-parser decodes the same files: every value that both give is equal but for the kinds of <see cref="Difference"/>.</summary>
+public class FileParserTests
+{
+    private const int Generated = 400;
+
+    [Fact]
+    public void ItReadsEveryGeneratedFileAlike()
+    {
+        FileParser.SkipUnlessThere();
+        var parts = Enumerable.Range(0, Generated).Select(number => GeneratedPart.Make(number, unusual: false)).ToList();
+        var (met, equal) = Compare(parts);
+        Assert.Subset(new HashSet<Difference> { Difference.WordOfANumber }, met);
+        Assert.True(equal > 100 * Generated, $"{equal} values were compared");
+    }
+
+    [Fact]
+    public void ItReadsUnusualGeneratedFilesAlikeButForTheNamedKinds()
+    {
+        FileParser.SkipUnlessThere();
+        var (met, equal) = Compare([.. Enumerable.Range(Generated, Generated).Select(number => GeneratedPart.Make(number, unusual: true))]);
+        Assert.Superset(
+            new HashSet<Difference>
+            {
+                Difference.PackedSpeedAndDistance, Difference.OtherBaseTypeThanTheProfile, Difference.SeveralValuesInOne, Difference.DeveloperFieldStandsIn,
+                Difference.DeveloperFieldOfTheSameName,
+            },
+            met);
+        Assert.True(equal > 100 * Generated, $"{equal} values were compared");
+    }
+
+    [Fact]
+    public void ItReadsTheHandMadeFilesAlike()
+    {
+        FileParser.SkipUnlessThere();
+        Compare([.. FitVectors.All.Where(IsWhole).SelectMany(PartFeatures.Split)]);
+    }
+
+    [Fact]
+    public void ItReadsTheRealFilesAlike()
+    {
+        FileParser.SkipUnlessThere();
+        Assert.SkipWhen(RealFiles.Paths.Count == 0, "real FIT files are not on this machine");
+        var (_, equal) = Compare([.. RealFiles.Paths.Select(File.ReadAllBytes).Where(IsWhole).SelectMany(PartFeatures.Split)]);
+        Assert.True(equal > 100_000, $"{equal} values were compared");
+    }
+
+    [Fact]
+    public void ItRefusesWhatIsDamaged()
+    {
+        FileParser.SkipUnlessThere();
+        var whole = GeneratedPart.Make(1, unusual: false);
+        byte[][] damaged = [.. Enumerable.Range(0, 40).Select(i => Damaged(whole, i))];
+        Assert.All(FileParser.Read(damaged), part => Assert.NotNull(part.Error));
+        Assert.All(damaged, bytes => Assert.NotNull(OurParts.Read(bytes).Error));
+    }
+
+    private static byte[] Damaged(byte[] whole, int number)
+    {
+        if (number % 2 == 0)
+            return whole[..(whole.Length - 1 - number)];
+
+        var bytes = whole.ToArray();
+        bytes[14 + (number * 7)] ^= 0x10;
+        return bytes;
+    }
+
+    private static bool IsWhole(byte[] file) => FitDecoder.CheckCompleteness(file) == FitCompleteness.Complete;
+
+    private static (HashSet<Difference> Met, int Equal) Compare(IReadOnlyList<byte[]> parts)
+    {
+        var (met, equal, faults) = (new HashSet<Difference>(), 0, new List<string>());
+        foreach (var (theirs, part) in FileParser.Read(parts).Zip(parts))
+        {
+            var comparison = new Comparison(OurParts.Read(part), theirs, PartFeatures.Of(part));
+            faults.AddRange(comparison.Run().Select(fault => $"{theirs.Name}: {fault}"));
+            met.UnionWith(comparison.Met);
+            equal += comparison.Equal;
+        }
+
+        Assert.True(faults.Count == 0, $"{faults.Count} values differ:\n{string.Join('\n', faults.Take(40))}");
+        return (met, equal);
+    }
+}
