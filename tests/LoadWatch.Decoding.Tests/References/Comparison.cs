@@ -29,7 +29,7 @@ internal sealed class Comparison(ReferencePart ours, ReferencePart theirs, PartF
 
     private void Refused(string error)
     {
-        if (ours.Error is null && !Excused(Difference.ReservedBitsOfAHeader) && !Excused(Difference.CompressedTimeWithoutReference))
+        if (ours.Error is null && !Excused(Difference.ReservedBitsOfAHeader) && !Excused(Difference.CompressedTimes))
             faults.Add($"refused by the reference alone: {error}");
     }
 
@@ -115,20 +115,19 @@ internal sealed class Comparison(ReferencePart ours, ReferencePart theirs, PartF
 
     private void Reading(string what, Channel channel, double? own, double? other)
     {
-        if (!IsSame(own, other) && features.Channels.FirstOrDefault(special => special.Channel == channel) is { Kind: var kind, Channel: var which } && which == channel && IsOf(channel))
-            Met.Add(kind);
+        var excuses = features.Channels.Where(special => special.Channel == channel).Select(special => special.Kind).ToList();
+        if (!IsSame(own, other) && excuses.Count > 0)
+            Met.UnionWith(excuses);
         else
             Same(what, own, other);
     }
 
-    private bool IsOf(Channel channel) => features.Channels.Any(special => special.Channel == channel);
-
     private void Times(string what, double? own, double? other)
     {
-        if (own is null && other is not null && Excused(Difference.UptimeIsNoDate))
+        if (own is null && other is not null && Excused(Difference.NotADate))
             return;
 
-        if (!IsSame(own, other) && Excused(Difference.OwnTimeUnderCompressedHeader))
+        if (!IsSame(own, other) && Excused(Difference.CompressedTimes))
             return;
 
         Same(what, own, other);

@@ -41,13 +41,18 @@ internal static class Programs
             File.Exists(Path.Combine(folder, name)) || File.Exists(Path.Combine(folder, name + ".exe")));
 
     /// <summary>What a program prints, line by line; it must end well.</summary>
-    public static IReadOnlyList<string> Lines(string name, IReadOnlyList<string> words)
+    public static IReadOnlyList<string> Lines(string name, IReadOnlyList<string> words) =>
+        TryLines(name, words) ?? throw new InvalidOperationException($"{name} failed");
+
+    /// <summary>What a program prints, line by line; null where it fails.</summary>
+    public static IReadOnlyList<string>? TryLines(string name, IReadOnlyList<string> words)
     {
-        using var process = Process.Start(new ProcessStartInfo(name, words) { RedirectStandardOutput = true, UseShellExecute = false })!;
-        var lines = process.StandardOutput.ReadToEnd().Split('\n', StringSplitOptions.RemoveEmptyEntries);
+        using var process = Process.Start(new ProcessStartInfo(name, words) { RedirectStandardOutput = true, RedirectStandardError = true, UseShellExecute = false })!;
+        process.ErrorDataReceived += (_, _) => { };
+        process.BeginErrorReadLine();
+        var lines = process.StandardOutput.ReadToEnd().Split(['\r', '\n'], StringSplitOptions.RemoveEmptyEntries);
         process.WaitForExit();
-        Assert.Equal(0, process.ExitCode);
-        return lines;
+        return process.ExitCode == 0 ? lines : null;
     }
 }
 

@@ -3,6 +3,19 @@ using static LoadWatch.Decoding.Fit.FitBaseType;
 
 namespace LoadWatch.Decoding.References;
 
+/// <summary>What a generated part may hold.</summary>
+internal enum GeneratedStyle
+{
+    /// <summary>What every decoder should read: one byte order, full times, one field for one thing.</summary>
+    Plain,
+
+    /// <summary>Everything that the format knows.</summary>
+    Usual,
+
+    /// <summary>Also what decoders are known to read in different ways.</summary>
+    Unusual,
+}
+
 /// <summary>
 /// A legal part by a number: layouts, byte orders, redefinitions, compressed times, unknown messages, developer fields, sessions, sets, lengths and values up
 /// to the ends of their range, in any mixture. The same number always gives the same bytes.
@@ -22,20 +35,21 @@ internal sealed class GeneratedPart
     ];
 
     private readonly Random random;
-    private readonly bool unusual;
+    private readonly GeneratedStyle style;
+    private readonly bool? order;
     private readonly FitPartWriter writer;
     private long now = 1_000_000_000;
 
-    private GeneratedPart(int number, bool unusual)
+    private GeneratedPart(int number, GeneratedStyle style)
     {
         random = new Random(number);
-        this.unusual = unusual;
+        this.style = style;
+        order = style == GeneratedStyle.Plain ? OneIn(2) : null;
         now += random.Next(100_000_000);
         writer = new FitPartWriter((FitHeaderStyle)random.Next(3));
     }
 
-    /// <param name="unusual">Whether it may hold what the references are known to read otherwise.</param>
-    public static byte[] Make(int number, bool unusual) => new GeneratedPart(number, unusual).Write();
+    public static byte[] Make(int number, GeneratedStyle style) => new GeneratedPart(number, style).Write();
 
     private byte[] Write()
     {
@@ -57,16 +71,18 @@ internal sealed class GeneratedPart
         return writer.ToBytes();
     }
 
+    private bool BigEndian => order ?? OneIn(3);
+
     private bool OneIn(int times) => random.Next(times) == 0;
 
-    private FitDefinition With(int message, params FitFieldLayout[] fields) => new(message, fields) { BigEndian = OneIn(3) };
+    private FitDefinition With(int message, params FitFieldLayout[] fields) => new(message, fields) { BigEndian = BigEndian };
 
     private void Describe()
     {
-        writer.Define(14, new(207, new(3, Unsigned8), new(1, Bytes, 16))).Message(14, 0, FitValue.None)
+        writer.Define(14, With(207, new(3, Unsigned8), new(1, Bytes, 16))).Message(14, 0, FitValue.None)
             .Define(14, With(206, new(0, Unsigned8), new(1, Unsigned8), new(2, Unsigned8), new(6, Unsigned8), new(3, Text, 16), new(8, Text, 8), new(14, Unsigned16), new(15, Unsigned8)));
         Description(0, 0x84, OneIn(2) ? 10 : FitValue.None, "Leg spring", "kN/m", FitValue.None, FitValue.None);
-        if (unusual)
+        if (style == GeneratedStyle.Unusual)
         {
             Description(1, 0x88, FitValue.None, "Power", "watts", 20, 7);
             Description(2, 0x02, FitValue.None, "heart_rate", "bpm", FitValue.None, FitValue.None);
@@ -80,14 +96,17 @@ internal sealed class GeneratedPart
     {
         var local = random.Next(0, 14);
         var fields = Fields.Where(_ => OneIn(2)).OrderBy(_ => random.Next()).ToList();
-        if (unusual)
+        if (style == GeneratedStyle.Unusual)
             fields.AddRange(Unusual.Where(field => OneIn(4) && fields.TrueForAll(known => known.Number != field.Number)).DistinctBy(field => field.Number));
 
-        var compressed = local < 4 && OneIn(2);
+        if (style == GeneratedStyle.Plain)
+            fields.RemoveAll(field => field.Number is 2 or 6);
+
+        var compressed = style != GeneratedStyle.Plain && local < 4 && OneIn(2);
         var developer = OneIn(2) ? new FitDeveloperLayout[] { new(0, Unsigned16, 0), new(1, Real32, 0), new(2, Unsigned8, 0), new(9, Unsigned8, 3, 0) } : [];
         writer.Define((local + 1) % 14, With(20, new FitFieldLayout(253, Unsigned32))).Message((local + 1) % 14, now);
         var time = compressed ? [] : new[] { new FitFieldLayout(253, Unsigned32) };
-        var definition = new FitDefinition(20, [.. time, .. fields]) { BigEndian = OneIn(3), Developer = developer };
+        var definition = new FitDefinition(20, [.. time, .. fields]) { BigEndian = BigEndian, Developer = developer };
         writer.Define(local, definition);
         for (var row = random.Next(1, 40); row > 0; row--)
         {
@@ -96,7 +115,7 @@ internal sealed class GeneratedPart
             if (compressed)
                 writer.Compressed(local, (int)(now & 31), values);
             else
-                writer.Message(local, [OneIn(50) ? FitValue.None : now, .. values]);
+                writer.Message(local, [style != GeneratedStyle.Plain && OneIn(50) ? FitValue.None : now, .. values]);
 
             if (OneIn(10))
                 Stray();
@@ -123,7 +142,7 @@ internal sealed class GeneratedPart
     private void Summaries()
     {
         writer.Define(14, With(18, new(253, Unsigned32), new(2, Unsigned32), new(5, Enumeration), new(6, Enumeration), new(7, Unsigned32), new(8, Unsigned32), new(9, Unsigned32)));
-        for (var sessions = random.Next(0, 3); sessions > 0; sessions--)
+        for (var sessions = random.Next(0, style == GeneratedStyle.Plain ? 2 : 3); sessions > 0; sessions--)
             writer.Message(14, now, now - random.Next(200), random.Next(0, 90), random.Next(0, 120), Number(Unsigned32), Number(Unsigned32), Number(Unsigned32));
 
         writer.Define(14, With(19, new(253, Unsigned32), new(2, Unsigned32))).Message(14, now, now);
@@ -151,6 +170,7 @@ internal sealed class GeneratedPart
         Text => new[] { "", "a", "abc", "Zug", "sieben7" }[random.Next(5)],
         _ when field.Count == 0 => FitValue.None,
         _ when field.Count > 1 => FitValue.Many([.. Enumerable.Range(0, random.Next(1, field.Count + 1)).Select(_ => Number(field.Type))]),
+        _ when style == GeneratedStyle.Plain && field.Number is 73 or 78 => FitValue.Of(Number(Unsigned16)),
         _ => FitValue.Of(Number(field.Type)),
     };
 

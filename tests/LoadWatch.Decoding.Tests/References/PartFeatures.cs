@@ -20,6 +20,12 @@ internal sealed class PartFeatures
 
     public HashSet<Difference> Kinds { get; } = [];
 
+    /// <summary>Channels with a wide and a narrow field in one definition.</summary>
+    public HashSet<Channel> ChannelsOfBabel { get; } = [];
+
+    /// <summary>What GPSBabel alone reads otherwise.</summary>
+    public HashSet<Difference> OfBabel { get; } = [];
+
     public static PartFeatures Of(byte[] part)
     {
         var features = new PartFeatures(part);
@@ -41,11 +47,13 @@ internal sealed class PartFeatures
     private void Walk(int at, int end)
     {
         var timed = false;
+        var orders = new HashSet<bool>();
         while (at < end)
         {
             var header = part[at++];
             if ((header & 0xC0) == 0x40)
             {
+                orders.Add(part[at + 1] != 0);
                 at = Define(header, at);
                 continue;
             }
@@ -55,6 +63,9 @@ internal sealed class PartFeatures
             timed |= definition.Fields.Any(field => field.Number == 253);
             at += definition.Size;
         }
+
+        if (orders.Count > 1)
+            OfBabel.Add(Difference.ByteOrderOfEachDefinition);
     }
 
     private int Define(byte header, int at)
@@ -91,19 +102,25 @@ internal sealed class PartFeatures
             Kinds.Add(Difference.ReservedBitsOfAHeader);
 
         var time = definition.Fields.Find(field => field.Number == 253);
-        if (compressed && !timed)
-            Kinds.Add(Difference.CompressedTimeWithoutReference);
+        if (compressed)
+            OfBabel.Add(Difference.CompressedTimes);
 
-        if (compressed && time is not null)
-            Kinds.Add(Difference.OwnTimeUnderCompressedHeader);
+        if (compressed && (!timed || time is not null))
+            Kinds.Add(Difference.CompressedTimes);
 
-        if (time is { Size: 4 } && part.AsSpan(at + time.Offset, 4) is var bytes && Math.Min(bytes[0], bytes[3]) < 0x10)
-            Kinds.Add(Difference.UptimeIsNoDate);
+        if (time is null or { Size: not 4 } || (part.AsSpan(at + time.Offset, 4) is var bytes && (Math.Min(bytes[0], bytes[3]) < 0x10 || !bytes.ContainsAnyExcept((byte)0xFF))))
+            Kinds.Add(Difference.NotADate);
 
         if (definition.Message == 206)
             Describe(definition, at);
         else if (definition.Message == 20)
             LookAtRecord(definition);
+    }
+
+    private void LookForPairs(Definition definition)
+    {
+        foreach (var pair in definition.Fields.Where(field => Known.ContainsKey(field.Number)).GroupBy(field => Known[field.Number].Channel).Where(pair => pair.Count() > 1))
+            ChannelsOfBabel.Add(pair.Key);
     }
 
     private void Describe(Definition definition, int at)
@@ -118,6 +135,7 @@ internal sealed class PartFeatures
 
     private void LookAtRecord(Definition definition)
     {
+        LookForPairs(definition);
         foreach (var field in definition.Fields)
         {
             if (field.Number == 8)
@@ -139,10 +157,10 @@ internal sealed class PartFeatures
                 continue;
 
             if (Known.TryGetValue(description.NativeField, out var stands))
-                Channels.Add((Difference.DeveloperFieldStandsIn, stands.Channel));
+                Channels.Add((Difference.DeveloperFields, stands.Channel));
 
             if (Names.TryGetValue(description.Name, out var named))
-                Channels.Add((Difference.DeveloperFieldOfTheSameName, named));
+                Channels.Add((Difference.DeveloperFields, named));
         }
     }
 
