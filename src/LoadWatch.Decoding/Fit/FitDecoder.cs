@@ -96,7 +96,7 @@ public sealed class FitDecoder
             Refuse(fault);
 
         if (reader.Content != pending)
-            reader.Content.Samples.Return();
+            reader.Content.Return();
 
         return fault is not null && frame.IsUnclosed(bytes.Span) ? bytes.Length : frame.End;
     }
@@ -114,7 +114,7 @@ public sealed class FitDecoder
         if (content.HasOnlyBeats && pending is null)
             problems.Add(new Problem(ProblemSeverity.Warning, "heart beats without an activity before them", offset));
         else if (content.HasOnlyBeats)
-            pending!.Late.Beats.AddRange(content.Late.Beats);
+            pending!.Late.Beats.AddRange(content.Late.Beats.Items);
         else if (content.HasTraining)
         {
             Settle();
@@ -127,7 +127,7 @@ public sealed class FitDecoder
         if (pending is { } content)
         {
             recordings.AddRange(PartRecordings.Of(content, recordings.Count + 1));
-            content.Samples.Return();
+            content.Return();
         }
 
         pending = null;

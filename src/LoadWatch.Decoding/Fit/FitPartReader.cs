@@ -11,7 +11,7 @@ internal sealed class FitPartReader
     private const int DeveloperBit = 0x20;
     private readonly MessagePlan?[] live = new MessagePlan?[LocalTypes];
     private readonly DeveloperFields developer = new();
-    private readonly PlanBook plans = new();
+    private readonly PlanBook plans = PlanBook.OfThread;
     private readonly MemoryBudget budget;
     private uint? clock;
     private string? fault;
@@ -75,7 +75,10 @@ internal sealed class FitPartReader
         if (plan.PayloadSize >= bytes.Length)
             return Fail("a message runs past the end of the data");
 
-        if (plan.IsColumnar && !isCompressed)
+        if (plan.IsPassedOver && !isCompressed)
+            return PassOver(plan, bytes);
+
+        if (plan.IsColumnar && !isCompressed && RecordRun.Begins(plan, bytes))
             return ReadRun(new RecordRun(plan, bytes));
 
         var payload = bytes.Slice(1, plan.PayloadSize);
@@ -83,6 +86,22 @@ internal sealed class FitPartReader
         clock = seconds ?? clock;
         Take(plan, payload, seconds * 1000L);
         return 1 + plan.PayloadSize;
+    }
+
+    /// <summary>Messages of one definition that follow each other; only their times matter.</summary>
+    private int PassOver(MessagePlan plan, ReadOnlySpan<byte> bytes)
+    {
+        var (header, stride, at) = (bytes[0], 1 + plan.PayloadSize, 0);
+        do
+        {
+            if (plan.TimestampOffset >= 0)
+                clock = plan.Timestamp(bytes[(at + 1)..]) ?? clock;
+
+            at += stride;
+        }
+        while (at + stride <= bytes.Length && bytes[at] == header);
+
+        return at;
     }
 
     private int ReadRun(in RecordRun run)

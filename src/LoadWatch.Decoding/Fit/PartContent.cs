@@ -8,6 +8,7 @@ internal sealed class PartContent(MemoryBudget budget)
     private const int SessionCost = 1200;
     private const int SetCost = 256;
     private const int SmallCost = 64;
+    private const int IntervalCost = 80;
     private const int Quarter = 15 * 60;
     private const int MostOffsetSeconds = 18 * 3600;
 
@@ -31,7 +32,7 @@ internal sealed class PartContent(MemoryBudget budget)
     public List<long?> Lengths { get; } = [];
 
     /// <summary>Times from beat to beat with the last time before them in the file; they carry none of their own.</summary>
-    public List<(long? Time, int Milliseconds)> Intervals { get; } = [];
+    public PooledList<(long? Time, int Milliseconds)> Intervals { get; } = new();
 
     public TimerPauses Pauses { get; } = new();
 
@@ -90,6 +91,14 @@ internal sealed class PartContent(MemoryBudget budget)
                 LocalOffsetSeconds ??= OffsetOf(time, message.Time(FitFields.TimestampCorrelation.LocalTimestamp));
                 break;
         }
+    }
+
+    /// <summary>Gives all lent memory back.</summary>
+    public void Return()
+    {
+        Samples.Return();
+        Late.Beats.Return();
+        Intervals.Return();
     }
 
     private static Sport SportOf(in FitMessage message, byte name, byte detail)
@@ -155,7 +164,10 @@ internal sealed class PartContent(MemoryBudget budget)
         for (; bytes.Length > 0; bytes = bytes[sizeof(ushort)..])
         {
             if (FitNumber.UInt16(bytes, message.BigEndian) is var milliseconds and > 0 and < ushort.MaxValue)
-                Keep(Intervals, (time, (int)milliseconds), SmallCost);
+            {
+                Intervals.Add((time, milliseconds));
+                budget.Spend(IntervalCost);
+            }
         }
     }
 
