@@ -1,4 +1,5 @@
 using LoadWatch.Recordings;
+using NodaTime;
 
 namespace LoadWatch.Decoding.Fit;
 
@@ -16,6 +17,8 @@ public sealed class FitDecoder
     private readonly List<Recording> recordings = [];
     private readonly List<Problem> problems = [];
     private readonly List<int?> fileTypes = [];
+    private readonly List<Recording> worn = [];
+    private readonly List<LocalDate> wornDates = [];
     private PartContent? pending;
 
     private FitDecoder(ReadOnlyMemory<byte> bytes)
@@ -53,7 +56,8 @@ public sealed class FitDecoder
             ReadParts();
 
         Settle();
-        return new DecodedFile("fit", FileType(), SourceName: null, recordings, problems);
+        var decoded = new DecodedFile("fit", FileType(), SourceName: null, recordings, problems);
+        return recordings.Count > 0 || worn.Count == 0 ? decoded : decoded with { Table = WornDays.Table(wornDates), Worn = worn };
     }
 
     private void ReadParts()
@@ -120,6 +124,18 @@ public sealed class FitDecoder
             Settle();
             pending = content;
         }
+        else if (!content.Monitoring.IsEmpty)
+            TakeMonitoring(content);
+    }
+
+    /// <summary>The log of a day: its walks and runs, else that the watch was worn without any.</summary>
+    private void TakeMonitoring(PartContent content)
+    {
+        Settle();
+        recordings.AddRange(MonitoredBouts.Of(content, recordings.Count + 1));
+        var dates = WornDays.Of(content);
+        wornDates.AddRange(dates);
+        worn.AddRange(WornDays.Witnesses(content, dates));
     }
 
     private void Settle()

@@ -38,6 +38,8 @@ internal sealed class PartContent(MemoryBudget budget)
 
     public SampleColumns Samples { get; } = new(budget);
 
+    public MonitoringLog Monitoring { get; } = new(budget);
+
     public LateBeats Late { get; } = new(budget);
 
     public bool HasTraining => IsTrainingType && (Sessions.Count > 0 || Samples.Count > 0 || Sets.Count > 0);
@@ -69,6 +71,13 @@ internal sealed class PartContent(MemoryBudget budget)
                 break;
             case FitMessages.Length:
                 Keep(Lengths, message.Time(FitFields.Lap.Start) ?? time, SmallCost);
+                break;
+            case FitMessages.Monitoring:
+                Monitoring.Read(message, time);
+                break;
+            case FitMessages.MonitoringInfo:
+                Monitoring.Note(time);
+                LocalOffsetSeconds = OffsetOf(time, message.Time(FitFields.MonitoringInfo.LocalTimestamp)) ?? LocalOffsetSeconds;
                 break;
             case FitMessages.BeatIntervals:
                 ReadIntervals(message, time);

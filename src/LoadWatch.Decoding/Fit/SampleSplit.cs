@@ -53,7 +53,7 @@ internal sealed class SampleSplit
 
     private static List<Stretch> Stretches(SampleColumns samples, SessionOwners owners)
     {
-        var stretches = new List<Stretch>();
+        var found = new List<Stretch>();
         var (first, owner) = (0, owners.Of(null));
         for (var row = 0; row < samples.Count && owners.Count > 1; row++)
         {
@@ -62,12 +62,12 @@ internal sealed class SampleSplit
             if (next == owner)
                 continue;
 
-            stretches.Add(new Stretch(first, row - first, owner));
+            found.Add(new Stretch(first, row - first, owner));
             (first, owner) = (row, next);
         }
 
-        stretches.Add(new Stretch(first, samples.Count - first, owner));
-        return stretches;
+        found.Add(new Stretch(first, samples.Count - first, owner));
+        return found;
     }
 
     /// <summary>Rows that follow each other and belong to one session.</summary>

@@ -51,7 +51,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
             return OfSeveral(content, file, subjects);
         }
 
-        var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings, now, configuration.Devices, configuration.People);
+        var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings.Concat(file.Worn), now, configuration.Devices, configuration.People);
         var verdict = OfTheRoster(ArrivalVerdict.Of(file, owners, now));
         if (!decided && Implausible(file, verdict) is { } reason)
         {
