@@ -54,6 +54,9 @@ public sealed record Recording
 
     public Device Device { get; init; } = Device.Unknown;
 
+    /// <summary>What its file lacks behind it, in plain words: it was cut off there, and what lies before was used. Null where the file is whole.</summary>
+    public string? CutOff { get; init; }
+
     /// <summary>Earliest dated row of any series, or null.</summary>
     public Instant? First => Gathered.Values.Append(Samples).Min(series => series.First);
 

@@ -21,9 +21,12 @@ public sealed class FitDecoder
     private readonly List<LocalDate> wornDates = [];
     private PartContent? pending;
 
-    private FitDecoder(ReadOnlyMemory<byte> bytes)
+    private readonly bool salvages;
+
+    private FitDecoder(ReadOnlyMemory<byte> bytes, bool salvages)
     {
         this.bytes = bytes;
+        this.salvages = salvages;
         budget = new MemoryBudget(bytes.Length);
     }
 
@@ -46,7 +49,8 @@ public sealed class FitDecoder
     }
 
     /// <summary>The recordings of a file, one per session, and what was wrong with it. Never throws for what the bytes hold.</summary>
-    public static DecodedFile Decode(ReadOnlyMemory<byte> bytes) => new FitDecoder(bytes).Decode();
+    /// <param name="salvages">Whether what lies before the end of a part that was cut off or never closed is used.</param>
+    public static DecodedFile Decode(ReadOnlyMemory<byte> bytes, bool salvages = false) => new FitDecoder(bytes, salvages).Decode();
 
     private DecodedFile Decode()
     {
@@ -96,6 +100,8 @@ public sealed class FitDecoder
             ?? reader.Read(bytes.Span[frame.DataStart..(int)frame.DataEnd], frame.DataStart);
         if (fault is null)
             Take(reader.Content, frame.Offset);
+        else if (salvages && FitSalvage.Read(reader, frame, bytes.Span))
+            TakeCutOff(reader.Content, fault, frame.Offset);
         else
             Refuse(fault);
 
@@ -103,6 +109,13 @@ public sealed class FitDecoder
             reader.Content.Return();
 
         return fault is not null && frame.IsUnclosed(bytes.Span) ? bytes.Length : frame.End;
+    }
+
+    private void TakeCutOff(PartContent content, Problem fault, long offset)
+    {
+        content.CutOff = fault.Reason;
+        problems.Add(fault with { Severity = ProblemSeverity.Warning, Reason = $"{fault.Reason}; what lies before is used" });
+        Take(content, offset);
     }
 
     private void Refuse(Problem fault)

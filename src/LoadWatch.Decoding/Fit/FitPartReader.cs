@@ -24,6 +24,9 @@ internal sealed class FitPartReader
 
     public PartContent Content { get; }
 
+    /// <summary>Whether a definition or message ran past the end of the data: all before it is whole.</summary>
+    public bool RanOut { get; private set; }
+
     /// <summary>Reads the data of a part; what stopped it is the answer, or null.</summary>
     /// <param name="offset">Where the data begins in the file.</param>
     public Problem? Read(ReadOnlySpan<byte> data, long offset)
@@ -44,7 +47,7 @@ internal sealed class FitPartReader
     {
         var size = DefinitionSize(bytes);
         if (size > bytes.Length)
-            return Fail("a definition runs past the end of the data");
+            return RunOut("a definition runs past the end of the data");
 
         live[bytes[0] & 0xF] = plans.Get(bytes[1..size]);
         return size;
@@ -73,7 +76,7 @@ internal sealed class FitPartReader
             return Fail($"local message type {local} is not defined");
 
         if (plan.PayloadSize >= bytes.Length)
-            return Fail("a message runs past the end of the data");
+            return RunOut("a message runs past the end of the data");
 
         if (plan.IsPassedOver && !isCompressed)
             return PassOver(plan, bytes);
@@ -134,6 +137,12 @@ internal sealed class FitPartReader
     {
         if (budget.Overspent)
             fault = "more messages than a file of this size can hold in reason";
+    }
+
+    private int RunOut(string reason)
+    {
+        RanOut = true;
+        return Fail(reason);
     }
 
     private int Fail(string reason)

@@ -34,6 +34,9 @@ internal sealed class PartContent(MemoryBudget budget)
     /// <summary>Times from beat to beat with the last time before them in the file; they carry none of their own.</summary>
     public PooledList<(long? Time, int Milliseconds)> Intervals { get; } = new();
 
+    /// <summary>What lacks behind it, where the part was cut off; null where it is whole.</summary>
+    public string? CutOff { get; set; }
+
     public TimerPauses Pauses { get; } = new();
 
     public SampleColumns Samples { get; } = new(budget);

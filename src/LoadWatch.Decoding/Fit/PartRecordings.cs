@@ -55,6 +55,7 @@ internal sealed class PartRecordings
         DistanceMetres = session.DistanceMetres,
         Samples = samples,
         Device = content.Device,
+        CutOff = content.CutOff,
     };
 
     private List<T>[] Shared<T>(IEnumerable<T> items, Func<T, long?> time)
