@@ -12,8 +12,7 @@ internal static class FileParser
     private static readonly string Folder = Path.Combine(Repository.Root, "tests", "References");
     private static readonly Lazy<bool> Runs = new(() => Directory.Exists(Path.Combine(Folder, "node_modules", "fit-file-parser")) && Programs.Has("node"));
 
-    public static void SkipUnlessThere() =>
-        Assert.SkipUnless(Runs.Value, "node or fit-file-parser is not on this machine (npm ci in tests/References)");
+    public static void SkipUnlessThere() => Programs.SkipUnless(Runs.Value, "node or fit-file-parser is not on this machine (npm ci in tests/References)");
 
     /// <summary>What it gives of each content, in their order.</summary>
     public static IReadOnlyList<ReferencePart> Read(IReadOnlyList<byte[]> contents)
@@ -36,6 +35,15 @@ internal static class FileParser
 /// <summary>Programs beside the tests.</summary>
 internal static class Programs
 {
+    private static readonly bool AreRequired = Environment.GetEnvironmentVariable("LOADWATCH_REFERENCES") == "required";
+
+    /// <summary>Where references are required, one that is missing is a failure.</summary>
+    public static void SkipUnless(bool there, string reason)
+    {
+        Assert.True(there || !AreRequired, reason);
+        Assert.SkipUnless(there, reason);
+    }
+
     public static bool Has(string name) =>
         (Environment.GetEnvironmentVariable("PATH") ?? "").Split(Path.PathSeparator).Any(folder =>
             File.Exists(Path.Combine(folder, name)) || File.Exists(Path.Combine(folder, name + ".exe")));
