@@ -88,6 +88,9 @@ public sealed record InboxEntry
 
     /// <summary>A file or folder that lies in the inbox whenever it is there, such as a hidden one on a share; blank: none.</summary>
     public string Marker { get; init; } = "";
+
+    /// <summary>Whether the beginning of a FIT file that was cut off is used; else such a file is refused.</summary>
+    public bool Salvage { get; init; }
 }
 
 public enum TakeMode

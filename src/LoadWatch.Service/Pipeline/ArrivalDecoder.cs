@@ -21,14 +21,18 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     /// <summary>What tables say that recordings are computed with; the sweep keeps it up to date.</summary>
     public TableBasis Basis { get; set; } = TableBasis.Of(configuration);
 
+    /// <summary>Whether a stored content was seen where files that were cut off are used.</summary>
+    public Func<string, bool> Salvages { get; init; } = _ => false;
+
     /// <summary>Never fails for what the content holds: one that breaks the computation is refused, and the others go on (I-10).</summary>
     /// <param name="claims">Ids of the people whom all sightings of the content name, or the one whom a decision names; where none, the devices or the content itself tell.</param>
     /// <param name="decided">A decision names the owner: then nobody asks whether the recordings can be theirs.</param>
-    public DecodedArrival Decode(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided)
+    /// <param name="salvages">Whether it was seen where files that were cut off are used.</param>
+    public DecodedArrival Decode(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided, bool salvages)
     {
         try
         {
-            return DecodeSound(content, claims, decided);
+            return DecodeSound(content, claims, decided, salvages);
         }
         catch (Exception e) when (IsDefect(e))
         {
@@ -40,7 +44,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     /// <summary>What only a fault of the program throws while it computes.</summary>
     public static bool IsDefect(Exception e) => e is ArithmeticException or ArgumentException or InvalidOperationException or IndexOutOfRangeException;
 
-    private DecodedArrival DecodeSound(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided)
+    private DecodedArrival DecodeSound(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided, bool salvages)
     {
         var kind = Words.Of(content.Kind);
         if (content.Kind is ContentKind.Gzip or ContentKind.Zip)
@@ -48,13 +52,13 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
             return new DecodedArrival(content.Sha, kind, ContainerVerdict(content), []);
         }
 
-        var file = decoders.Decode(content.Bytes);
+        var file = decoders.Decode(content.Bytes, salvages);
         if (Subjects(file) is { Count: > 0 } subjects && (subjects.Count > 1 || claims.Count == 0))
         {
             return OfSeveral(content, file, subjects);
         }
 
-        var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings, now, configuration.Devices, configuration.People);
+        var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings.Concat(file.Worn), now, configuration.Devices, configuration.People);
         var verdict = OfTheRoster(ArrivalVerdict.Of(file, owners, now));
         var cut = verdict.Person is not null && file.Table is null ? Usable(file).Select(Cut).ToList() : [];
         if (!decided && Implausible(cut, verdict) is { } reason)
@@ -164,7 +168,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     {
         try
         {
-            return originals.ReadWhole(arrival.ObjectSha) is { } bytes ? decoders.Decode(Content(arrival, "", bytes).Bytes).Recordings : [];
+            return originals.ReadWhole(arrival.ObjectSha) is { } bytes ? decoders.Decode(Content(arrival, "", bytes).Bytes, Salvages(arrival.Sha)).Recordings : [];
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException or InvalidDataException)
         {
@@ -189,11 +193,13 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         var recording = usable.Recording;
         var planned = Basis.Planned(person, LocalStart.Of(recording, person).Date);
         var cut = SessionWindow.Of(recording, planned) is { } window ? RecordingCut.To(recording, window.Start, window.End) : CutRecording.Nothing(recording);
-        return cut.LeftOut.Count == 0
+        var values = cut.LeftOut.Count == 0
             ? ActivityComputation.Compute(usable, person, Basis.AnchorsOf(person), configuration.Computation)
-            : WithCuts(ActivityComputation.Compute(cut.Recording, person, Basis.AnchorsOf(person), configuration.Computation));
-
-        ActivityValues WithCuts(ActivityValues values) => values with { Remarks = [.. cut.LeftOut, .. values.Remarks], Cuts = [.. cut.Cuts, .. values.Cuts] };
+            : ActivityComputation.Compute(cut.Recording, person, Basis.AnchorsOf(person), configuration.Computation);
+        IReadOnlyList<string> missing = recording.CutOff is { } reason ? [$"only its beginning is used: {reason}"] : [];
+        return cut.LeftOut.Count + missing.Count == 0
+            ? values
+            : values with { Remarks = [.. missing, .. cut.LeftOut, .. values.Remarks], Cuts = [.. cut.Cuts, .. values.Cuts] };
     }
 
     private static ArrivalVerdict ContainerVerdict(ArrivalContent content) => (content.Members, content.Problems.Count) switch

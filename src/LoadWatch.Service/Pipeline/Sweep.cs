@@ -38,7 +38,10 @@ public sealed class Sweep
         this.known = known ?? new KnownFiles();
         var archive = new Archive(folder);
         var decoders = new DecoderSet(configuration.Layouts, ContainerLimits.For(configuration.LargestFileBytes));
-        decoder = new ArrivalDecoder(configuration, decoders, archive, now);
+        decoder = new ArrivalDecoder(configuration, decoders, archive, now)
+        {
+            Salvages = sha => configuration.Inboxes.Any(inbox => inbox.Salvage) && configuration.Salvages(store.Read(session => session.Sightings.Of(sha)).Select(sighting => sighting.Inbox)),
+        };
         var reader = new ArchiveReader(store, archive, decoders);
         settlement = new Settlement(configuration, store, decoder, Report);
         intake = new Intake(configuration, store, archive, decoders, settlement, this.known, now, Report);
