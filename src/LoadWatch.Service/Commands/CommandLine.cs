@@ -79,6 +79,7 @@ public static class CommandLine
         AssignCommand.Create(),
         ExplainCommand.Create(),
         InspectCommand.Create(),
+        LayoutCommand.Create(),
         ExportCommand.Create(),
         RebuildCommand.Create(),
         VerifyCommand.Create(),
