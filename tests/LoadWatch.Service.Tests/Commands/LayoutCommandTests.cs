@@ -1,6 +1,7 @@
 using System.Text.Json;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Tests.Pipeline;
+using WorkingFolder = LoadWatch.Service.Tests.Pipeline.WorkingFolder;
 
 namespace LoadWatch.Service.Tests.Commands;
 
