@@ -40,20 +40,24 @@ public sealed class DecoderSet(IReadOnlyList<CsvLayout> layouts, ContainerLimits
     public Completeness CheckCompleteness(ReadOnlyMemory<byte> bytes) => Recognise(bytes.Span) switch
     {
         ContentKind.Fit => When(FitDecoder.CheckCompleteness(bytes.Span) == FitCompleteness.Complete),
-        ContentKind.Gzip => When(Gzip.Unpack(bytes, "", limits).Problems.Count == 0),
+        ContentKind.Gzip => When(Gzip.IsWhole(bytes, limits)),
         ContentKind.Zip => When(ZipDirectory.Read(bytes.Span, limits).Fault is null),
         _ => Completeness.NeedsSettling,
     };
 
     /// <summary>Decodes a FIT file, or a CSV by the layout that its column names pick. Anything else gives nothing and an error.</summary>
-    public DecodedFile Decode(ReadOnlyMemory<byte> bytes) => Recognise(bytes.Span) switch
+    /// <param name="salvages">Whether what lies before the end of a FIT file that was cut off or never closed is used.</param>
+    public DecodedFile Decode(ReadOnlyMemory<byte> bytes, bool salvages = false) => Recognise(bytes.Span) switch
     {
-        ContentKind.Fit => FitDecoder.Decode(bytes),
+        ContentKind.Fit => FitDecoder.Decode(bytes, salvages),
         ContentKind.Text => CsvDecoder.Decode(bytes, layouts),
         ContentKind.Gzip => Refused("gzip", "a gzip file is unpacked first"),
         ContentKind.Zip => Refused("zip", "a zip file is unpacked first"),
         _ => Refused("unknown", bytes.IsEmpty ? "the file is empty" : "not a FIT, CSV, gzip or zip file"),
     };
+
+    /// <inheritdoc cref="CsvDecoder.Read"/>
+    public CsvReadThrough ReadText(Func<Stream> open, Action<Recording> take) => CsvDecoder.Read(open, layouts, take);
 
     /// <summary>Unpacks a gzip or zip file; its members are contents of their own.</summary>
     /// <param name="bytes">The whole content.</param>

@@ -121,6 +121,11 @@ public static class DayExplanation
             text.AppendLine(CultureInfo.InvariantCulture, $"    {OneLine.Of(remark)}");
         }
 
+        if (recorded is not null)
+        {
+            CutText.Append(text, recorded.Values, recorded.Session.LocalOffset, "    ");
+        }
+
         foreach (var contribution in recorded?.Merge.Contributions ?? [])
         {
             var (sha, part) = RecordingKey.Parse(contribution.Key);

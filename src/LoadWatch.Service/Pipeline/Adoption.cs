@@ -112,6 +112,12 @@ public sealed class Adoption
             AskForOwners();
         }
 
+        if (Changed(BasisParts.Salvage))
+        {
+            session.Outdated.AddInState(ArrivalState.Refused);
+            session.Outdated.AddInState(ArrivalState.Stored);
+        }
+
         foreach (var person in configuration.People.Keys)
         {
             AskFor(person);

@@ -38,6 +38,9 @@ public static class BasisParts
     /// <summary>How file names tell whose a file is.</summary>
     public const string FileNames = "file_names";
 
+    /// <summary>In which inboxes files that were cut off are used; there only where there is one.</summary>
+    public const string Salvage = "salvage";
+
     /// <summary>Of a person: birth year, sex and zone.</summary>
     public const string Profile = "profile";
 
@@ -69,7 +72,10 @@ public static class BasisParts
         new(Everybody, Names, Hash(new { People = configuration.People.Values.Select(person => new { person.Id, person.Name, person.Aliases }), Groups = GroupNames(configuration) })),
         new(Everybody, Devices, Hash(configuration.Devices.All.Select(one => new { one.Serial, one.Person, From = Date(one.From), To = Date(one.To), one.Session }))),
         new(Everybody, FileNames, Hash(configuration.Inboxes.Where(inbox => inbox.FilePattern is not null).Select(inbox => new { inbox.Name, inbox.FilePattern!.Text }))),
+        .. OfSalvage([.. configuration.Inboxes.Where(inbox => inbox.Salvage).Select(inbox => inbox.Name).Order(StringComparer.Ordinal)]),
     ];
+
+    private static IEnumerable<BasisPart> OfSalvage(IReadOnlyList<string> inboxes) => inboxes.Count == 0 ? [] : [new(Everybody, Salvage, Hash(inboxes))];
 
     private static IEnumerable<BasisPart> OfPerson(WorkingConfiguration configuration, Person person)
     {

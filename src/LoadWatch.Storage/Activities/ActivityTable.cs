@@ -12,10 +12,10 @@ public sealed class ActivityTable
     private const string Insert = """
         INSERT INTO activity (
             key, sha, part, person, date, recordings, session, heart_rate_mean_bpm, heart_rate_max_bpm,
-            power_mean_watts, power_max_watts, usable_share, times_in_zone, remarks, quantities, stimulus, checksum)
+            power_mean_watts, power_max_watts, usable_share, times_in_zone, remarks, quantities, stimulus, cuts, checksum)
         VALUES (
             @Key, @Sha, @Part, @Person, @Date, @Recordings, @Session, @HeartRateMeanBpm, @HeartRateMaxBpm,
-            @PowerMeanWatts, @PowerMaxWatts, @UsableShare, @TimesInZone, @Remarks, @Quantities, @Stimulus, @Checksum)
+            @PowerMeanWatts, @PowerMaxWatts, @UsableShare, @TimesInZone, @Remarks, @Quantities, @Stimulus, @Cuts, @Checksum)
         """;
 
     private const string InsertHistogram = "INSERT INTO histogram (activity, channel, bins) VALUES (@Activity, @Channel, @Bins)";
@@ -29,7 +29,7 @@ public sealed class ActivityTable
 
     private const string SelectActivities = """
         SELECT r.*, a.key, a.date, a.recordings, a.session, a.heart_rate_mean_bpm, a.heart_rate_max_bpm,
-            a.power_mean_watts, a.power_max_watts, a.usable_share, a.times_in_zone, a.remarks, a.quantities, a.stimulus, a.checksum
+            a.power_mean_watts, a.power_max_watts, a.usable_share, a.times_in_zone, a.remarks, a.quantities, a.stimulus, a.cuts, a.checksum
         FROM activity a JOIN recording r ON r.sha = a.sha AND r.part = a.part
         """;
 
@@ -98,6 +98,9 @@ public sealed class ActivityTable
     /// <summary>Everybody's activities whose date is in the range, both ends included, sorted by date, start and key.</summary>
     public IReadOnlyList<StoredActivity> All(LocalDate? from = null, LocalDate? to = null) =>
         Select(InDates, new { from = from ?? LocalDate.MinIsoValue, to = to ?? LocalDate.MaxIsoValue });
+
+    /// <summary>The activity of a key, or null.</summary>
+    public StoredActivity? Get(string key) => session.Row<ActivityRow>(SelectOne, new { key })?.ToActivity();
 
     /// <summary>The first date of a person's activities, or null.</summary>
     public LocalDate? FirstOfPerson(string person) => session.Row<FirstRow>(SelectFirst, new { person })?.Date;
