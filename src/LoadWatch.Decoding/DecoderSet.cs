@@ -46,9 +46,10 @@ public sealed class DecoderSet(IReadOnlyList<CsvLayout> layouts, ContainerLimits
     };
 
     /// <summary>Decodes a FIT file, or a CSV by the layout that its column names pick. Anything else gives nothing and an error.</summary>
-    public DecodedFile Decode(ReadOnlyMemory<byte> bytes) => Recognise(bytes.Span) switch
+    /// <param name="salvages">Whether what lies before the end of a FIT file that was cut off or never closed is used.</param>
+    public DecodedFile Decode(ReadOnlyMemory<byte> bytes, bool salvages = false) => Recognise(bytes.Span) switch
     {
-        ContentKind.Fit => FitDecoder.Decode(bytes),
+        ContentKind.Fit => FitDecoder.Decode(bytes, salvages),
         ContentKind.Text => CsvDecoder.Decode(bytes, layouts),
         ContentKind.Gzip => Refused("gzip", "a gzip file is unpacked first"),
         ContentKind.Zip => Refused("zip", "a zip file is unpacked first"),

@@ -15,4 +15,9 @@ public sealed record DecodedFile(
 {
     /// <summary>Rows of a table where the content is one; then there are no recordings. Null for everything else.</summary>
     public DecodedTable? Table { get; init; }
+
+    /// <summary>
+    /// Where a device wrote the table, one entry a date with its numbers and a moment of that date, without samples: they tell whose it was. Empty for everything else.
+    /// </summary>
+    public IReadOnlyList<Recording> Worn { get; init; } = [];
 }

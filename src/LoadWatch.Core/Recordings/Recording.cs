@@ -36,8 +36,14 @@ public sealed record Recording
     /// </summary>
     public IReadOnlyDictionary<Channel, SampleSeries> Gathered { get; init; } = new Dictionary<Channel, SampleSeries>();
 
+    /// <summary>When the timer stood while the readings of <see cref="Gathered"/> were taken, by channel.</summary>
+    public IReadOnlyDictionary<Channel, IReadOnlyList<Pause>> GatheredPauses { get; init; } = new Dictionary<Channel, IReadOnlyList<Pause>>();
+
     /// <summary>Beats delivered in messages of their own (chest straps under water), in time order; not merged into the samples.</summary>
     public IReadOnlyList<TimedHeartRate> LateHeartRates { get; init; } = [];
+
+    /// <summary>Milliseconds from beat to beat in the order of the file, 1 to 65534; empty where the device kept none.</summary>
+    public IReadOnlyList<int> BeatIntervals { get; init; } = [];
 
     public IReadOnlyList<StrengthSet> Sets { get; init; } = [];
 
@@ -50,6 +56,9 @@ public sealed record Recording
     public int Lengths { get; init; }
 
     public Device Device { get; init; } = Device.Unknown;
+
+    /// <summary>What its file lacks behind it, in plain words: it was cut off there, and what lies before was used. Null where the file is whole.</summary>
+    public string? CutOff { get; init; }
 
     /// <summary>Earliest dated row of any series, or null.</summary>
     public Instant? First => Gathered.Values.Append(Samples).Min(series => series.First);

@@ -1,8 +1,9 @@
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Csv;
 
-/// <summary>Takes out the readings of a row that was received too badly.</summary>
+/// <summary>Marks the readings of a row that was received too badly.</summary>
 internal sealed class QualityCell(CsvTable table, CsvQuality wanted, char decimalMark)
 {
     private readonly int column = table.Find(wanted.Column)!.Value;
@@ -51,7 +52,7 @@ internal sealed class QualityCell(CsvTable table, CsvQuality wanted, char decima
         {
             foreach (var channel in wanted.Channels)
             {
-                readings[(int)channel] = double.NaN;
+                readings[(int)channel] = double.IsNaN(readings[(int)channel]) ? double.NaN : CutMark.Of(CutReason.MarkedBad);
             }
         }
 

@@ -1,3 +1,4 @@
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Csv;
@@ -21,7 +22,7 @@ internal sealed class SampleColumns
         Latest = Latest > unixMilliseconds ? Latest : unixMilliseconds;
         for (var channel = 0; channel < values.Length; channel++)
         {
-            if (!double.IsNaN(readings[channel]))
+            if (CutMark.IsTaken(readings[channel]))
             {
                 values[channel].Set(Count, readings[channel]);
             }

@@ -5,13 +5,25 @@ namespace LoadWatch.Decoding.Fit;
 /// <summary>A field of a record message that feeds a channel: value = raw / <paramref name="Scale"/> - <paramref name="Shift"/>.</summary>
 internal readonly record struct ChannelSource(Channel Channel, FieldSlot Slot, double Scale, double Shift)
 {
-    private readonly bool isSingle = Slot.Count == 1;
+    /// <summary>Bytes of a single whole number without a sign, the usual kind; 0 for every other.</summary>
+    public int Width { get; } = (Slot.Type, Slot.Count) switch
+    {
+        (FitBaseType.Unsigned8, 1) => sizeof(byte),
+        (FitBaseType.Unsigned16, 1) => sizeof(ushort),
+        (FitBaseType.Unsigned32, 1) => sizeof(uint),
+        _ => 0,
+    };
 
     public double Read(ReadOnlySpan<byte> payload, bool bigEndian)
     {
         var bytes = payload.Slice(Slot.Offset, Slot.Size);
-        var raw = isSingle ? FitNumber.Read(bytes, Slot.Type, bigEndian) : FitNumber.FirstValid(bytes, Slot.Type, bigEndian);
-        return (raw / Scale) - Shift;
+        return Width switch
+        {
+            sizeof(byte) => bytes[0] is var raw and not byte.MaxValue ? (raw / Scale) - Shift : double.NaN,
+            sizeof(ushort) => FitNumber.UInt16(bytes, bigEndian) is var raw and not ushort.MaxValue ? (raw / Scale) - Shift : double.NaN,
+            sizeof(uint) => FitNumber.UInt32(bytes, bigEndian) is var raw and not uint.MaxValue ? (raw / Scale) - Shift : double.NaN,
+            _ => (FitNumber.FirstValid(bytes, Slot.Type, bigEndian) / Scale) - Shift,
+        };
     }
 
     /// <summary>The source for a field of the profile, or null where the field feeds no channel.</summary>

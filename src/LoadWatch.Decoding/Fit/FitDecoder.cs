@@ -1,4 +1,5 @@
 using LoadWatch.Recordings;
+using NodaTime;
 
 namespace LoadWatch.Decoding.Fit;
 
@@ -16,11 +17,16 @@ public sealed class FitDecoder
     private readonly List<Recording> recordings = [];
     private readonly List<Problem> problems = [];
     private readonly List<int?> fileTypes = [];
+    private readonly List<Recording> worn = [];
+    private readonly List<LocalDate> wornDates = [];
     private PartContent? pending;
 
-    private FitDecoder(ReadOnlyMemory<byte> bytes)
+    private readonly bool salvages;
+
+    private FitDecoder(ReadOnlyMemory<byte> bytes, bool salvages)
     {
         this.bytes = bytes;
+        this.salvages = salvages;
         budget = new MemoryBudget(bytes.Length);
     }
 
@@ -43,7 +49,8 @@ public sealed class FitDecoder
     }
 
     /// <summary>The recordings of a file, one per session, and what was wrong with it. Never throws for what the bytes hold.</summary>
-    public static DecodedFile Decode(ReadOnlyMemory<byte> bytes) => new FitDecoder(bytes).Decode();
+    /// <param name="salvages">Whether what lies before the end of a part that was cut off or never closed is used.</param>
+    public static DecodedFile Decode(ReadOnlyMemory<byte> bytes, bool salvages = false) => new FitDecoder(bytes, salvages).Decode();
 
     private DecodedFile Decode()
     {
@@ -53,7 +60,8 @@ public sealed class FitDecoder
             ReadParts();
 
         Settle();
-        return new DecodedFile("fit", FileType(), SourceName: null, recordings, problems);
+        var decoded = new DecodedFile("fit", FileType(), SourceName: null, recordings, problems);
+        return recordings.Count > 0 || worn.Count == 0 ? decoded : decoded with { Table = WornDays.Table(wornDates), Worn = worn };
     }
 
     private void ReadParts()
@@ -92,13 +100,22 @@ public sealed class FitDecoder
             ?? reader.Read(bytes.Span[frame.DataStart..(int)frame.DataEnd], frame.DataStart);
         if (fault is null)
             Take(reader.Content, frame.Offset);
+        else if (salvages && FitSalvage.Read(reader, frame, bytes.Span))
+            TakeCutOff(reader.Content, fault, frame.Offset);
         else
             Refuse(fault);
 
         if (reader.Content != pending)
-            reader.Content.Samples.Return();
+            reader.Content.Return();
 
         return fault is not null && frame.IsUnclosed(bytes.Span) ? bytes.Length : frame.End;
+    }
+
+    private void TakeCutOff(PartContent content, Problem fault, long offset)
+    {
+        content.CutOff = fault.Reason;
+        problems.Add(fault with { Severity = ProblemSeverity.Warning, Reason = $"{fault.Reason}; what lies before is used" });
+        Take(content, offset);
     }
 
     private void Refuse(Problem fault)
@@ -114,12 +131,24 @@ public sealed class FitDecoder
         if (content.HasOnlyBeats && pending is null)
             problems.Add(new Problem(ProblemSeverity.Warning, "heart beats without an activity before them", offset));
         else if (content.HasOnlyBeats)
-            pending!.Late.Beats.AddRange(content.Late.Beats);
+            pending!.Late.Beats.AddRange(content.Late.Beats.Items);
         else if (content.HasTraining)
         {
             Settle();
             pending = content;
         }
+        else if (!content.Monitoring.IsEmpty)
+            TakeMonitoring(content);
+    }
+
+    /// <summary>The log of a day: its walks and runs, else that the watch was worn without any.</summary>
+    private void TakeMonitoring(PartContent content)
+    {
+        Settle();
+        recordings.AddRange(MonitoredBouts.Of(content, recordings.Count + 1));
+        var dates = WornDays.Of(content);
+        wornDates.AddRange(dates);
+        worn.AddRange(WornDays.Witnesses(content, dates));
     }
 
     private void Settle()
@@ -127,7 +156,7 @@ public sealed class FitDecoder
         if (pending is { } content)
         {
             recordings.AddRange(PartRecordings.Of(content, recordings.Count + 1));
-            content.Samples.Return();
+            content.Return();
         }
 
         pending = null;

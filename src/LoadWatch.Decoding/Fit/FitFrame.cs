@@ -40,6 +40,12 @@ internal readonly record struct FitFrame(int Offset, int HeaderSize, long Size)
         return FitCrc.Of(bytes[Offset..(int)End]) == 0 ? null : Fault("wrong checksum: this part is damaged or was never finished", DataEnd);
     }
 
+    /// <summary>Whether the header's own checksum is right; old headers have none, and it may be left out.</summary>
+    public bool HasSoundHeader(ReadOnlySpan<byte> bytes) =>
+        HeaderSize < FullHeader
+        || (bytes.Length >= DataStart
+            && (BinaryPrimitives.ReadUInt16LittleEndian(bytes[(Offset + ShortHeader)..]) == 0 || FitCrc.Of(bytes.Slice(Offset, FullHeader)) == 0));
+
     public bool IsUnclosed(ReadOnlySpan<byte> bytes) =>
         DataEnd == DataStart && bytes.Length > End && !HasHeader(bytes[(int)End..]);
 

@@ -11,7 +11,7 @@ internal sealed class FitPartReader
     private const int DeveloperBit = 0x20;
     private readonly MessagePlan?[] live = new MessagePlan?[LocalTypes];
     private readonly DeveloperFields developer = new();
-    private readonly PlanBook plans = new();
+    private readonly PlanBook plans = PlanBook.OfThread;
     private readonly MemoryBudget budget;
     private uint? clock;
     private string? fault;
@@ -23,6 +23,9 @@ internal sealed class FitPartReader
     }
 
     public PartContent Content { get; }
+
+    /// <summary>Whether a definition or message ran past the end of the data: all before it is whole.</summary>
+    public bool RanOut { get; private set; }
 
     /// <summary>Reads the data of a part; what stopped it is the answer, or null.</summary>
     /// <param name="offset">Where the data begins in the file.</param>
@@ -44,7 +47,7 @@ internal sealed class FitPartReader
     {
         var size = DefinitionSize(bytes);
         if (size > bytes.Length)
-            return Fail("a definition runs past the end of the data");
+            return RunOut("a definition runs past the end of the data");
 
         live[bytes[0] & 0xF] = plans.Get(bytes[1..size]);
         return size;
@@ -73,9 +76,12 @@ internal sealed class FitPartReader
             return Fail($"local message type {local} is not defined");
 
         if (plan.PayloadSize >= bytes.Length)
-            return Fail("a message runs past the end of the data");
+            return RunOut("a message runs past the end of the data");
 
-        if (plan.IsColumnar && !isCompressed)
+        if (plan.IsPassedOver && !isCompressed)
+            return PassOver(plan, bytes);
+
+        if (plan.IsColumnar && !isCompressed && RecordRun.Begins(plan, bytes))
             return ReadRun(new RecordRun(plan, bytes));
 
         var payload = bytes.Slice(1, plan.PayloadSize);
@@ -83,6 +89,22 @@ internal sealed class FitPartReader
         clock = seconds ?? clock;
         Take(plan, payload, seconds * 1000L);
         return 1 + plan.PayloadSize;
+    }
+
+    /// <summary>Messages of one definition that follow each other; only their times matter.</summary>
+    private int PassOver(MessagePlan plan, ReadOnlySpan<byte> bytes)
+    {
+        var (header, stride, at) = (bytes[0], 1 + plan.PayloadSize, 0);
+        do
+        {
+            if (plan.TimestampOffset >= 0)
+                clock = plan.Timestamp(bytes[(at + 1)..]) ?? clock;
+
+            at += stride;
+        }
+        while (at + stride <= bytes.Length && bytes[at] == header);
+
+        return at;
     }
 
     private int ReadRun(in RecordRun run)
@@ -106,7 +128,7 @@ internal sealed class FitPartReader
         else if (plan.Message == FitMessages.FieldDescription)
             developer.Describe(new FitMessage(plan, payload));
         else if (FitMessages.IsRead(plan.Message))
-            Content.Read(new FitMessage(plan, payload), plan.Message, time);
+            Content.Read(new FitMessage(plan, payload), plan.Message, plan.Message == FitMessages.BeatIntervals ? clock * 1000L : time);
 
         CheckBudget();
     }
@@ -115,6 +137,12 @@ internal sealed class FitPartReader
     {
         if (budget.Overspent)
             fault = "more messages than a file of this size can hold in reason";
+    }
+
+    private int RunOut(string reason)
+    {
+        RanOut = true;
+        return Fail(reason);
     }
 
     private int Fail(string reason)

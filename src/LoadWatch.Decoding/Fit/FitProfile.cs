@@ -11,7 +11,10 @@ internal static class FitMessages
     public const int Event = 21;
     public const int DeviceInfo = 23;
     public const int Activity = 34;
+    public const int Monitoring = 55;
+    public const int BeatIntervals = 78;
     public const int Length = 101;
+    public const int MonitoringInfo = 103;
     public const int HeartRate = 132;
     public const int TimestampCorrelation = 162;
     public const int FieldDescription = 206;
@@ -20,7 +23,7 @@ internal static class FitMessages
 
     /// <summary>Whether the decoder reads more of it than its length and its time.</summary>
     public static bool IsRead(int message) => message is FileId or Sport or Session or Lap or Record or Event or DeviceInfo
-        or Activity or Length or HeartRate or TimestampCorrelation or FieldDescription or Set;
+        or Activity or Monitoring or MonitoringInfo or BeatIntervals or Length or HeartRate or TimestampCorrelation or FieldDescription or Set;
 }
 
 /// <summary>Field numbers, by message.</summary>
@@ -93,6 +96,30 @@ internal static class FitFields
         public const byte LocalTimestamp = 5;
     }
 
+    public static class Monitoring
+    {
+        /// <summary>A counter of steps where the kind is walking or running.</summary>
+        public const byte Steps = 3;
+        public const byte Kind = 5;
+        public const byte Steps16 = 9;
+
+        /// <summary>Kind in the low five bits.</summary>
+        public const byte KindAndIntensity = 24;
+        public const byte ShortTimestamp = 26;
+        public const byte HeartRate = 27;
+    }
+
+    public static class MonitoringInfo
+    {
+        public const byte LocalTimestamp = 0;
+    }
+
+    public static class BeatIntervals
+    {
+        /// <summary>Several in one message, unused places without a value.</summary>
+        public const byte Milliseconds = 0;
+    }
+
     public static class HeartRate
     {
         /// <summary>1/32768 s.</summary>
@@ -110,6 +137,7 @@ internal static class FitFields
     public static class TimestampCorrelation
     {
         public const byte SystemTimestamp = 1;
+        public const byte LocalTimestamp = 3;
     }
 
     public static class FieldDescription

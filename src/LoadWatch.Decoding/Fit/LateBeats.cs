@@ -15,7 +15,7 @@ internal sealed class LateBeats(MemoryBudget budget)
     private uint eventTime;
 
     /// <summary>Beats in file order; their times are milliseconds of the FIT epoch or of the device's uptime.</summary>
-    public List<(long Time, int BeatsPerMinute)> Beats { get; } = [];
+    public PooledList<(long Time, int BeatsPerMinute)> Beats { get; } = new();
 
     public void Read(in FitMessage message)
     {

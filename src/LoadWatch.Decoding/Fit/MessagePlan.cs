@@ -1,9 +1,10 @@
 namespace LoadWatch.Decoding.Fit;
 
-/// <summary>A definition made ready for its messages: lengths summed, places looked up.</summary>
+/// <summary>A definition made ready for its messages: lengths summed, places looked up. It may serve several parts, one after the other.</summary>
 internal sealed class MessagePlan
 {
-    private int boundVersion = -1;
+    private DeveloperFields? boundTo;
+    private int boundVersion;
 
     public required int Message { get; init; }
 
@@ -27,6 +28,9 @@ internal sealed class MessagePlan
     /// <summary>Record messages: developer fields that stand for a field of the profile, as described when last bound.</summary>
     public ChannelSource[] Developer { get; private set; } = [];
 
+    /// <summary>Nothing of it is read but its length and its time.</summary>
+    public required bool IsPassedOver { get; init; }
+
     /// <summary>Record messages with a time whose channels have one source each: they can be read field by field.</summary>
     public bool IsColumnar { get; init; }
 
@@ -40,11 +44,11 @@ internal sealed class MessagePlan
     /// <summary>Binds the developer fields anew where descriptions changed since the last time.</summary>
     public void Bind(DeveloperFields developer)
     {
-        if (DeveloperSlots.Length == 0 || boundVersion == developer.Version)
+        if (DeveloperSlots.Length == 0 || (boundTo == developer && boundVersion == developer.Version))
             return;
 
         Developer = [.. DeveloperSlots.Select(developer.Source).OfType<ChannelSource>()];
-        boundVersion = developer.Version;
+        (boundTo, boundVersion) = (developer, developer.Version);
     }
 }
 

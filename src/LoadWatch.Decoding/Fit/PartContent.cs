@@ -8,6 +8,7 @@ internal sealed class PartContent(MemoryBudget budget)
     private const int SessionCost = 1200;
     private const int SetCost = 256;
     private const int SmallCost = 64;
+    private const int IntervalCost = 80;
     private const int Quarter = 15 * 60;
     private const int MostOffsetSeconds = 18 * 3600;
 
@@ -30,9 +31,17 @@ internal sealed class PartContent(MemoryBudget budget)
 
     public List<long?> Lengths { get; } = [];
 
+    /// <summary>Times from beat to beat with the last time before them in the file; they carry none of their own.</summary>
+    public PooledList<(long? Time, int Milliseconds)> Intervals { get; } = new();
+
+    /// <summary>What lacks behind it, where the part was cut off; null where it is whole.</summary>
+    public string? CutOff { get; set; }
+
     public TimerPauses Pauses { get; } = new();
 
     public SampleColumns Samples { get; } = new(budget);
+
+    public MonitoringLog Monitoring { get; } = new(budget);
 
     public LateBeats Late { get; } = new(budget);
 
@@ -66,6 +75,16 @@ internal sealed class PartContent(MemoryBudget budget)
             case FitMessages.Length:
                 Keep(Lengths, message.Time(FitFields.Lap.Start) ?? time, SmallCost);
                 break;
+            case FitMessages.Monitoring:
+                Monitoring.Read(message, time);
+                break;
+            case FitMessages.MonitoringInfo:
+                Monitoring.Note(time);
+                LocalOffsetSeconds = OffsetOf(time, message.Time(FitFields.MonitoringInfo.LocalTimestamp)) ?? LocalOffsetSeconds;
+                break;
+            case FitMessages.BeatIntervals:
+                ReadIntervals(message, time);
+                break;
             case FitMessages.Event:
                 Pauses.Read(message, time);
                 budget.Spend(SmallCost);
@@ -77,12 +96,21 @@ internal sealed class PartContent(MemoryBudget budget)
                 Late.Read(message);
                 break;
             case FitMessages.Activity:
-                ReadActivity(message, time);
+                LocalOffsetSeconds = OffsetOf(time, message.Time(FitFields.Activity.LocalTimestamp)) ?? LocalOffsetSeconds;
                 break;
             case FitMessages.TimestampCorrelation:
                 Clock = Clock.Correlated(time, message.Time(FitFields.TimestampCorrelation.SystemTimestamp));
+                LocalOffsetSeconds ??= OffsetOf(time, message.Time(FitFields.TimestampCorrelation.LocalTimestamp));
                 break;
         }
+    }
+
+    /// <summary>Gives all lent memory back.</summary>
+    public void Return()
+    {
+        Samples.Return();
+        Late.Beats.Return();
+        Intervals.Return();
     }
 
     private static Sport SportOf(in FitMessage message, byte name, byte detail)
@@ -142,14 +170,27 @@ internal sealed class PartContent(MemoryBudget budget)
         Keep(Sets, (start, set), SetCost);
     }
 
-    private void ReadActivity(in FitMessage message, long? time)
+    private void ReadIntervals(in FitMessage message, long? time)
     {
-        if (!FitClock.IsDate(time) || message.Time(FitFields.Activity.LocalTimestamp) is not { } local)
-            return;
+        var bytes = message.Values(FitFields.BeatIntervals.Milliseconds, sizeof(ushort));
+        for (; bytes.Length > 0; bytes = bytes[sizeof(ushort)..])
+        {
+            if (FitNumber.UInt16(bytes, message.BigEndian) is var milliseconds and > 0 and < ushort.MaxValue)
+            {
+                Intervals.Add((time, milliseconds));
+                budget.Spend(IntervalCost);
+            }
+        }
+    }
 
-        var seconds = (long)Math.Round((local - time!.Value) / (1000.0 * Quarter)) * Quarter;
-        if (Math.Abs(seconds) <= MostOffsetSeconds)
-            LocalOffsetSeconds = (int)seconds;
+    /// <summary>The quarter of an hour that a local time is ahead of the date it belongs to; null where either is no date or no zone is so far off.</summary>
+    private static int? OffsetOf(long? time, long? local)
+    {
+        if (!FitClock.IsDate(time) || local is null)
+            return null;
+
+        var seconds = (long)Math.Round((local.Value - time!.Value) / (1000.0 * Quarter)) * Quarter;
+        return Math.Abs(seconds) <= MostOffsetSeconds ? (int)seconds : null;
     }
 }
 

@@ -30,7 +30,8 @@ internal sealed class PartRecordings
         var laps = Shared(content.Laps, lap => lap);
         var lengths = Shared(content.Lengths, length => length);
         var pauses = Shared(content.Pauses.All, pause => pause.Start);
-        var beats = Shared(content.Late.Beats, beat => beat.Time);
+        var intervals = Shared(content.Intervals.Items, interval => interval.Time, interval => interval.Milliseconds);
+        var beats = Shared(content.Late.Beats.Items, beat => beat.Time, Dated);
         return [.. sessions.Select((session, i) => Basics(session, samples[i]) with
         {
             Part = firstPart + i,
@@ -38,7 +39,8 @@ internal sealed class PartRecordings
             Laps = laps[i].Count,
             Lengths = lengths[i].Count,
             Pauses = Pauses(pauses[i], samples[i]),
-            LateHeartRates = Beats(beats[i]),
+            LateHeartRates = InTimeOrder(beats[i]),
+            BeatIntervals = intervals[i],
         })];
     }
 
@@ -53,6 +55,7 @@ internal sealed class PartRecordings
         DistanceMetres = session.DistanceMetres,
         Samples = samples,
         Device = content.Device,
+        CutOff = content.CutOff,
     };
 
     private List<T>[] Shared<T>(IEnumerable<T> items, Func<T, long?> time)
@@ -77,9 +80,37 @@ internal sealed class PartRecordings
         return [.. pauses.OrderBy(pause => pause.Start)];
     }
 
-    private List<TimedHeartRate> Beats(List<(long Time, int BeatsPerMinute)> beats) =>
-        [.. beats
-            .Select(beat => new TimedHeartRate(content.Clock.UnixMilliseconds(beat.Time), beat.BeatsPerMinute))
-            .Where(beat => beat.UnixMilliseconds != SampleSeries.Undated)
-            .OrderBy(beat => beat.UnixMilliseconds)];
+    /// <summary>The same for many items, each made into another, without a list that grows.</summary>
+    private TShared[][] Shared<T, TShared>(ReadOnlySpan<T> items, Func<T, long?> time, Func<T, TShared> made)
+    {
+        var counts = new int[sessions.Count];
+        foreach (var item in items)
+            counts[owners.Of(time(item))]++;
+
+        var shared = Array.ConvertAll(counts, count => count == 0 ? [] : new TShared[count]);
+        foreach (var item in items)
+        {
+            var owner = owners.Of(time(item));
+            shared[owner][^counts[owner]--] = made(item);
+        }
+
+        return shared;
+    }
+
+    private TimedHeartRate Dated((long Time, int BeatsPerMinute) beat) => new(content.Clock.UnixMilliseconds(beat.Time), beat.BeatsPerMinute);
+
+    /// <summary>Beats that cannot be dated are left out.</summary>
+    private static TimedHeartRate[] InTimeOrder(TimedHeartRate[] beats)
+    {
+        for (var i = 1; i < beats.Length; i++)
+        {
+            if (beats[i].UnixMilliseconds < beats[i - 1].UnixMilliseconds)
+            {
+                beats = [.. beats.OrderBy(beat => beat.UnixMilliseconds)];
+                break;
+            }
+        }
+
+        return beats is [{ UnixMilliseconds: SampleSeries.Undated }, ..] ? Array.FindAll(beats, beat => beat.UnixMilliseconds != SampleSeries.Undated) : beats;
+    }
 }

@@ -26,6 +26,7 @@ internal static class PlanCompiler
             BigEndian = bigEndian,
             PayloadSize = size,
             TimestampOffset = timestamp.Size == 4 ? timestamp.Offset : -1,
+            IsPassedOver = !FitMessages.IsRead(message),
             Fields = FitMessages.IsRead(message) && !isRecord ? Array.FindAll(fields, field => field.Size > 0) : [],
             Native = native,
             DeveloperSlots = isRecord ? developer : [],

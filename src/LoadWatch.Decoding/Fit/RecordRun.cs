@@ -28,6 +28,10 @@ internal readonly ref struct RecordRun
         messages = bytes[..(Rows * stride)];
     }
 
+    /// <summary>Whether the whole message in front is followed by another of its header.</summary>
+    public static bool Begins(MessagePlan plan, ReadOnlySpan<byte> bytes) =>
+        1 + plan.PayloadSize is var stride && bytes.Length >= 2 * stride && bytes[stride] == bytes[0];
+
     public int Rows { get; }
 
     public ReadOnlySpan<ChannelSource> Sources => plan.Native;
@@ -53,11 +57,11 @@ internal readonly ref struct RecordRun
     public uint? Timestamp(int row) => plan.Timestamp(messages[((row * stride) + 1)..]);
 
     /// <summary>Sets what the messages hold for a channel; the last value of them is the answer, NaN where there is none.</summary>
-    public double Read(in ChannelSource source, SparseColumn<double> column, int firstRow) => (source.Slot, plan.BigEndian) switch
+    public double Read(in ChannelSource source, SparseColumn<double> column, int firstRow) => (source.Width, plan.BigEndian) switch
     {
-        ({ Type: FitBaseType.Unsigned8, Count: 1 }, _) => Read<OneByte>(source, column, firstRow),
-        ({ Type: FitBaseType.Unsigned16, Count: 1 }, false) => Read<TwoBytes>(source, column, firstRow),
-        ({ Type: FitBaseType.Unsigned32, Count: 1 }, false) => Read<FourBytes>(source, column, firstRow),
+        (sizeof(byte), _) => Read<OneByte>(source, column, firstRow),
+        (sizeof(ushort), false) => Read<TwoBytes>(source, column, firstRow),
+        (sizeof(uint), false) => Read<FourBytes>(source, column, firstRow),
         _ => ReadAny(source, column, firstRow),
     };
 

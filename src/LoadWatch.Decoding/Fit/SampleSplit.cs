@@ -5,16 +5,15 @@ namespace LoadWatch.Decoding.Fit;
 /// <summary>The samples of each session of a part. A row without a time stays with the row before it.</summary>
 internal sealed class SampleSplit
 {
-    private readonly SampleColumns samples;
-    private readonly SessionOwners owners;
+    private readonly List<Stretch> stretches;
     private readonly int[] rowsOf;
 
     private SampleSplit(SampleColumns samples, SessionOwners owners)
     {
-        this.samples = samples;
-        this.owners = owners;
+        stretches = Stretches(samples, owners);
         rowsOf = new int[owners.Count];
-        ForEachRun((_, rows, owner) => rowsOf[owner] += rows);
+        foreach (var stretch in stretches)
+            rowsOf[stretch.Owner] += stretch.Rows;
     }
 
     /// <summary>One series per session, in the order of the sessions.</summary>
@@ -43,29 +42,34 @@ internal sealed class SampleSplit
     {
         var columns = Array.ConvertAll(rowsOf, rows => GC.AllocateUninitializedArray<T>(rows));
         var filled = new int[rowsOf.Length];
-        ForEachRun((first, rows, owner) =>
+        foreach (var (first, rows, owner) in stretches)
         {
             column.CopyTo(first, columns[owner].AsSpan(filled[owner], rows));
             filled[owner] += rows;
-        });
+        }
+
         return columns;
     }
 
-    /// <summary>Rows that follow each other and belong to one session: first row, number of rows, session.</summary>
-    private void ForEachRun(Action<int, int, int> take)
+    private static List<Stretch> Stretches(SampleColumns samples, SessionOwners owners)
     {
+        var found = new List<Stretch>();
         var (first, owner) = (0, owners.Of(null));
         for (var row = 0; row < samples.Count && owners.Count > 1; row++)
         {
             var time = samples.Times[row];
-            var next = time == SampleSeries.Undated ? owner : owners.Of(time);
+            var next = time == SampleSeries.Undated ? owner : owners.Of(time, owner);
             if (next == owner)
                 continue;
 
-            take(first, row - first, owner);
+            found.Add(new Stretch(first, row - first, owner));
             (first, owner) = (row, next);
         }
 
-        take(first, samples.Count - first, owner);
+        found.Add(new Stretch(first, samples.Count - first, owner));
+        return found;
     }
+
+    /// <summary>Rows that follow each other and belong to one session.</summary>
+    private readonly record struct Stretch(int First, int Rows, int Owner);
 }

@@ -96,7 +96,7 @@ public static class CommandLine
 
     private static int? Expected(Exception e) => e switch
     {
-        ConfigurationException => ExitCode.Configuration,
+        ConfigurationException or NewerDatabaseException => ExitCode.Configuration,
         InstanceRunningException => ExitCode.TryLater,
         DatabaseRefusedException or InvalidDataException => ExitCode.Data,
         AggregateException { InnerException: { } inner } => Expected(inner),

@@ -12,6 +12,7 @@ internal static class InboxesReader
         {
             FilePattern = FilePattern.Parse(entry.FilePattern),
             Marker = entry.Marker.Length > 0 ? entry.Marker : null,
+            Salvage = entry.Salvage,
         }).ToList();
         foreach (var (entry, i) in inboxes.Select((entry, i) => (entry, i)))
         {

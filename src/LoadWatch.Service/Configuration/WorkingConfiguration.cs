@@ -46,6 +46,9 @@ public sealed record WorkingConfiguration(
     /// <summary>Finds people and groups by how they are written.</summary>
     public required Subjects Subjects { get; init; }
 
+    /// <summary>Whether files that were cut off are used of any of these inboxes.</summary>
+    public bool Salvages(IEnumerable<string> inboxes) => Inboxes.Any(inbox => inbox.Salvage && inboxes.Contains(inbox.Name, StringComparer.Ordinal));
+
     /// <summary>The people whom a contact's brief is about, sorted by id.</summary>
     public IEnumerable<Person> PeopleOf(Contact contact) =>
         People.Values
@@ -64,4 +67,7 @@ public sealed record Inbox(string Name, string Path, TakeMode Take)
 
     /// <summary>Name of what must lie in it for it to be the inbox; null: nothing.</summary>
     public string? Marker { get; init; }
+
+    /// <summary>Whether the beginning of a FIT file that was cut off is used.</summary>
+    public bool Salvage { get; init; }
 }

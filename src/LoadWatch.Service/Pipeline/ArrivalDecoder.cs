@@ -21,14 +21,18 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     /// <summary>What tables say that recordings are computed with; the sweep keeps it up to date.</summary>
     public TableBasis Basis { get; set; } = TableBasis.Of(configuration);
 
+    /// <summary>Whether a stored content was seen where files that were cut off are used.</summary>
+    public Func<string, bool> Salvages { get; init; } = _ => false;
+
     /// <summary>Never fails for what the content holds: one that breaks the computation is refused, and the others go on (I-10).</summary>
     /// <param name="claims">Ids of the people whom all sightings of the content name, or the one whom a decision names; where none, the devices or the content itself tell.</param>
     /// <param name="decided">A decision names the owner: then nobody asks whether the recordings can be theirs.</param>
-    public DecodedArrival Decode(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided)
+    /// <param name="salvages">Whether it was seen where files that were cut off are used.</param>
+    public DecodedArrival Decode(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided, bool salvages)
     {
         try
         {
-            return DecodeSound(content, claims, decided);
+            return DecodeSound(content, claims, decided, salvages);
         }
         catch (Exception e) when (IsDefect(e))
         {
@@ -40,7 +44,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     /// <summary>What only a fault of the program throws while it computes.</summary>
     public static bool IsDefect(Exception e) => e is ArithmeticException or ArgumentException or InvalidOperationException or IndexOutOfRangeException;
 
-    private DecodedArrival DecodeSound(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided)
+    private DecodedArrival DecodeSound(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided, bool salvages)
     {
         var kind = Words.Of(content.Kind);
         if (content.Kind is ContentKind.Gzip or ContentKind.Zip)
@@ -48,22 +52,24 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
             return new DecodedArrival(content.Sha, kind, ContainerVerdict(content), []);
         }
 
-        var file = decoders.Decode(content.Bytes);
+        var file = decoders.Decode(content.Bytes, salvages);
         if (Subjects(file) is { Count: > 0 } subjects && (subjects.Count > 1 || claims.Count == 0))
         {
             return OfSeveral(content, file, subjects);
         }
 
-        var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings, now, configuration.Devices, configuration.People);
+        var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings.Concat(file.Worn), now, configuration.Devices, configuration.People);
         var verdict = OfTheRoster(ArrivalVerdict.Of(file, owners, now));
-        if (!decided && Implausible(file, verdict) is { } reason)
+        var cut = verdict.Person is not null && file.Table is null ? Usable(file).Select(Cut).ToList() : [];
+        if (!decided && Implausible(cut, verdict) is { } reason)
         {
             verdict = new ArrivalVerdict(ArrivalState.Held, reason, null);
         }
 
-        var recordings = verdict.Person is { } owner && file.Table is null ? Usable(file).Select(recording => Compute(content.Sha, recording, configuration.People[owner], file.SourceName)) : [];
+        var recordings = verdict.Person is { } owner ? cut.Select(usable => Compute(content.Sha, usable, configuration.People[owner], file.SourceName)) : [];
         return new DecodedArrival(content.Sha, file.Kind, verdict, recordings.ToList())
         {
+            Problems = Problems(file),
             Table = verdict.State == ArrivalState.Stored ? file.Table : null,
             Questions = verdict.State == ArrivalState.Stored && file.Table is not null ? RowsNotUsed(file.Problems) : [],
         };
@@ -77,6 +83,13 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         _ => [$"{problems.Count} rows are not used, the first two: {problems[0]}; {problems[1]}"],
     };
 
+    private static IReadOnlyList<string> Problems(DecodedFile file)
+    {
+        var more = file.Problems.Count - DecodedArrival.MostProblems;
+        var told = file.Problems.Take(DecodedArrival.MostProblems).Select(problem => problem.ToString());
+        return more > 0 ? [.. told, $"{more} more"] : [.. told];
+    }
+
     private static List<string> Subjects(DecodedFile file) =>
         [.. file.Recordings.Select(recording => recording.Subject).OfType<string>().Distinct(StringComparer.Ordinal)];
 
@@ -88,18 +101,17 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         var questions = new List<string>();
         foreach (var (recording, person) in owned)
         {
-            var implausible = person is null ? null : Plausibility.Of(recording, person, Basis.AnchorsOf(person), LocalStart.Of(recording, person).Date);
             if (person is null)
             {
                 questions.Add($"\"{recording.Subject}\" is not in the roster: a line there, an alias or a line in devices.csv takes the recording up");
             }
-            else if (implausible is not null)
+            else if (Cut(recording) is var usable && Implausible(usable, person) is { } implausible)
             {
                 questions.Add($"the recording of \"{recording.Subject}\" is left out: {implausible}");
             }
             else
             {
-                recordings.Add(Compute(content.Sha, recording, person, file.SourceName));
+                recordings.Add(Compute(content.Sha, usable, person, file.SourceName));
             }
         }
 
@@ -109,6 +121,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
             : new ArrivalVerdict(ArrivalState.Held, owned.Count == 0 ? "no recording with a date" : $"owner unknown: none of the {subjects.Count} people in it is in the roster", null);
         return new DecodedArrival(content.Sha, file.Kind, verdict, recordings)
         {
+            Problems = Problems(file),
             Questions = recordings.Count > 0 ? asked : [],
         };
     }
@@ -124,9 +137,12 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     private IEnumerable<Recording> Usable(DecodedFile file) => file.Recordings.Where(recording => ArrivalVerdict.IsUsable(recording, now));
 
     /// <summary>Why a file cannot be its owner's, by the first of its recordings that says so.</summary>
-    private string? Implausible(DecodedFile file, ArrivalVerdict verdict) => verdict.Person is { } id && configuration.People.TryGetValue(id, out var person)
-        ? Usable(file).Select(recording => Plausibility.Of(recording, person, Basis.AnchorsOf(person), LocalStart.Of(recording, person).Date)).FirstOrDefault(reason => reason is not null)
+    private string? Implausible(IEnumerable<UsableRecording> recordings, ArrivalVerdict verdict) => verdict.Person is { } id && configuration.People.TryGetValue(id, out var person)
+        ? recordings.Select(recording => Implausible(recording, person)).FirstOrDefault(reason => reason is not null)
         : null;
+
+    private string? Implausible(UsableRecording recording, Person person) =>
+        Plausibility.Of(recording, person, Basis.AnchorsOf(person), LocalStart.Of(recording.Recording, person).Date);
 
     /// <summary>Folders only name people of the roster; one whom a decision names may have left it since.</summary>
     private ArrivalVerdict OfTheRoster(ArrivalVerdict verdict) =>
@@ -152,7 +168,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     {
         try
         {
-            return originals.ReadWhole(arrival.ObjectSha) is { } bytes ? decoders.Decode(Content(arrival, "", bytes).Bytes).Recordings : [];
+            return originals.ReadWhole(arrival.ObjectSha) is { } bytes ? decoders.Decode(Content(arrival, "", bytes).Bytes, Salvages(arrival.Sha)).Recordings : [];
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException or InvalidDataException)
         {
@@ -161,25 +177,29 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     }
 
     /// <summary>Everything computed from a recording of a person of the roster: of the part within the planned session, where the plan has its time.</summary>
-    public ActivityValues Values(Recording recording, string person) =>
-        Values(new UsableRecording(recording, configuration.Computation.UsableShareWanted), configuration.People[person]);
+    public ActivityValues Values(Recording recording, string person) => Values(Cut(recording), configuration.People[person]);
 
-    private ComputedRecording Compute(string sha, Recording recording, Person person, string? sourceName)
-    {
-        var usable = new UsableRecording(recording, configuration.Computation.UsableShareWanted);
-        return new ComputedRecording(RecordingSummaries.Of(sha, usable, person, sourceName), recording, Values(usable, person));
-    }
+    /// <summary>Makes one recording of those of an activity, each by the quality cuts of the configuration; null where none gives anything.</summary>
+    public Recording? Merged(SessionPlan plan, IReadOnlyDictionary<string, Recording> recordings) =>
+        MergedSession.Of(plan, recordings, configuration.Computation.Quality);
+
+    private UsableRecording Cut(Recording recording) => new(recording, configuration.Computation.UsableShareWanted, configuration.Computation.Quality);
+
+    private ComputedRecording Compute(string sha, UsableRecording usable, Person person, string? sourceName) =>
+        new(RecordingSummaries.Of(sha, usable, person, sourceName), usable.Recording, Values(usable, person));
 
     private ActivityValues Values(UsableRecording usable, Person person)
     {
         var recording = usable.Recording;
         var planned = Basis.Planned(person, LocalStart.Of(recording, person).Date);
-        var cut = SessionWindow.Of(recording, planned) is { } window ? RecordingCut.To(recording, window.Start, window.End) : new CutRecording(recording, []);
-        return cut.LeftOut.Count == 0
+        var cut = SessionWindow.Of(recording, planned) is { } window ? RecordingCut.To(recording, window.Start, window.End) : CutRecording.Nothing(recording);
+        var values = cut.LeftOut.Count == 0
             ? ActivityComputation.Compute(usable, person, Basis.AnchorsOf(person), configuration.Computation)
-            : Cut(ActivityComputation.Compute(cut.Recording, person, Basis.AnchorsOf(person), configuration.Computation));
-
-        ActivityValues Cut(ActivityValues values) => values with { Remarks = [.. cut.LeftOut, .. values.Remarks] };
+            : ActivityComputation.Compute(cut.Recording, person, Basis.AnchorsOf(person), configuration.Computation);
+        IReadOnlyList<string> missing = recording.CutOff is { } reason ? [$"only its beginning is used: {reason}"] : [];
+        return cut.LeftOut.Count + missing.Count == 0
+            ? values
+            : values with { Remarks = [.. missing, .. cut.LeftOut, .. values.Remarks], Cuts = [.. cut.Cuts, .. values.Cuts] };
     }
 
     private static ArrivalVerdict ContainerVerdict(ArrivalContent content) => (content.Members, content.Problems.Count) switch

@@ -1,6 +1,7 @@
 using System.Security.Cryptography;
 using System.Text.Json;
 using LoadWatch.Activities;
+using LoadWatch.Days;
 using LoadWatch.People;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Stimulus;
@@ -37,6 +38,9 @@ public static class BasisParts
     /// <summary>How file names tell whose a file is.</summary>
     public const string FileNames = "file_names";
 
+    /// <summary>In which inboxes files that were cut off are used; there only where there is one.</summary>
+    public const string Salvage = "salvage";
+
     /// <summary>Of a person: birth year, sex and zone.</summary>
     public const string Profile = "profile";
 
@@ -49,7 +53,7 @@ public static class BasisParts
     /// <summary>Of a person: the group, and the names by which a plan may mean it.</summary>
     public const string Group = "group";
 
-    /// <summary>Of a person: what days and rules take from the group.</summary>
+    /// <summary>Of a person: what days and rules take from the group, and how they are computed.</summary>
     public const string Rules = "rules";
 
     private static readonly JsonSerializerOptions Json = new(ConfigurationJson.Options) { WriteIndented = false };
@@ -68,7 +72,10 @@ public static class BasisParts
         new(Everybody, Names, Hash(new { People = configuration.People.Values.Select(person => new { person.Id, person.Name, person.Aliases }), Groups = GroupNames(configuration) })),
         new(Everybody, Devices, Hash(configuration.Devices.All.Select(one => new { one.Serial, one.Person, From = Date(one.From), To = Date(one.To), one.Session }))),
         new(Everybody, FileNames, Hash(configuration.Inboxes.Where(inbox => inbox.FilePattern is not null).Select(inbox => new { inbox.Name, inbox.FilePattern!.Text }))),
+        .. OfSalvage([.. configuration.Inboxes.Where(inbox => inbox.Salvage).Select(inbox => inbox.Name).Order(StringComparer.Ordinal)]),
     ];
+
+    private static IEnumerable<BasisPart> OfSalvage(IReadOnlyList<string> inboxes) => inboxes.Count == 0 ? [] : [new(Everybody, Salvage, Hash(inboxes))];
 
     private static IEnumerable<BasisPart> OfPerson(WorkingConfiguration configuration, Person person)
     {
@@ -79,7 +86,7 @@ public static class BasisParts
             new(person.Id, HeartRate, Date(person.HeartRateInvalidFrom)),
             new(person.Id, Anchors, string.Join('\n', configuration.Anchors.Of(person.Id).Select(Line).Order(StringComparer.Ordinal))),
             new(person.Id, Group, Hash(new { person.Group, Names = GroupNames(configuration) })),
-            new(person.Id, Rules, Hash(new { person.Name, group.LoadQuantity, group.LoadFallbacks, group.Limits })),
+            new(person.Id, Rules, Hash(new { person.Name, group.LoadQuantity, group.LoadFallbacks, group.Limits, LoadCalendar.Version })),
         ];
     }
 

@@ -38,7 +38,7 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
         }
 
         var pending = store.Read(session => Pending(session, seen, force, gone));
-        var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims, item.IsDecided)).ToList();
+        var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims, item.IsDecided, item.Salvages)).ToList();
         var before = pending.ToDictionary(item => item.Content.Sha, item => item.Before, StringComparer.Ordinal);
         var shelf = new RecordingShelf(decoder);
         decoded.ForEach(arrival => arrival.Recordings.ToList().ForEach(shelf.Add));
@@ -106,7 +106,7 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
     });
 
     /// <summary>Contents that are new, or whose owner is told differently now, each once.</summary>
-    private List<(ArrivalContent Content, IReadOnlyList<string> Claims, bool IsDecided, ArrivalState? Before)> Pending(
+    private List<(ArrivalContent Content, IReadOnlyList<string> Claims, bool IsDecided, bool Salvages, ArrivalState? Before)> Pending(
         StoreSession session, IReadOnlyList<SeenContent> seen, bool force, IReadOnlyList<Sighting> gone)
     {
         var decided = session.Decisions.Assigned();
@@ -118,10 +118,10 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
                 var names = session.Sightings.Of(same.Key).Except(gone).Select(sighting => new SeenName(sighting.Inbox, sighting.Path))
                     .Concat(same.Where(item => item.Origin is not null).Select(item => new SeenName(item.Origin!.Inbox, item.Content.Path)))
                     .ToList();
-                return (same.First().Content, Claims: Attribution.Claims(decided.GetValueOrDefault(same.Key)?.Person, names, configuration), Arrival: session.Arrivals.Get(same.Key));
+                return (same.First().Content, Claims: Attribution.Claims(decided.GetValueOrDefault(same.Key)?.Person, names, configuration), Salvages: configuration.Salvages(names.Select(name => name.Inbox)), Arrival: session.Arrivals.Get(same.Key));
             })
             .Where(item => force || IsPending(item.Arrival, item.Content, item.Claims))
-            .Select(item => (item.Content, item.Claims, decided.ContainsKey(item.Content.Sha), item.Arrival?.State))
+            .Select(item => (item.Content, item.Claims, decided.ContainsKey(item.Content.Sha), item.Salvages, item.Arrival?.State))
             .ToList();
     }
 

@@ -38,7 +38,10 @@ public sealed class Sweep
         this.known = known ?? new KnownFiles();
         var archive = new Archive(folder);
         var decoders = new DecoderSet(configuration.Layouts, ContainerLimits.For(configuration.LargestFileBytes));
-        decoder = new ArrivalDecoder(configuration, decoders, archive, now);
+        decoder = new ArrivalDecoder(configuration, decoders, archive, now)
+        {
+            Salvages = sha => configuration.Inboxes.Any(inbox => inbox.Salvage) && configuration.Salvages(store.Read(session => session.Sightings.Of(sha)).Select(sighting => sighting.Inbox)),
+        };
         var reader = new ArchiveReader(store, archive, decoders);
         settlement = new Settlement(configuration, store, decoder, Report);
         intake = new Intake(configuration, store, archive, decoders, settlement, this.known, now, Report);
@@ -47,7 +50,7 @@ public sealed class Sweep
         answers = new Answers(configuration, now);
         assigned = new AssignedFiles(configuration, store, reader, settlement, Report);
         tables = new Tables(configuration, store, decoder, Report);
-        recomputations = new Recomputations(store, reader, settlement, Report);
+        recomputations = new Recomputations(store, archive, reader, settlement, probe, Report);
         briefs = new Briefs(configuration, now, Report.Unreadable, Report.MissingInboxes);
     }
 
@@ -153,6 +156,7 @@ public sealed class Sweep
         new DayUpdate(configuration, store, now, Report).Run(cancel, new Evaluation(configuration, answers, briefs, now, Report).Run);
         KillPoint.Pass("evaluated");
         new Deliveries(store, Deliveries.Channels(configuration), Report).Run(now);
+        Report.Missed = store.Read(session => MissedNotices.All(session, configuration).Count());
         new Pages(configuration, store, briefs, Report).Rewrite(now, all: !PagesAreCurrent || isNewConfiguration || Report.HasNews);
         PagesAreWritten = true;
     }

@@ -53,6 +53,10 @@ public static class SafeFile
         return StatusOf(path) is { IsRegular: true } status ? status.Stamp : null;
     }
 
+    /// <summary>False for a folder that may not be listed or whose files may not be reached.</summary>
+    public static bool MayEnter(string folder) =>
+        !OperatingSystem.IsLinux() || LinuxCalls.Access(folder, LinuxCalls.ToEnter) == 0 || Marshal.GetLastPInvokeError() is not (Errno.AccessDenied or Errno.NotPermitted);
+
     /// <summary>
     /// The identity of a folder, null where there is none. It changes when the folder is made anew or something is mounted over it,
     /// which sends no event. A link is followed: an inbox may be named by one.

@@ -7,35 +7,53 @@ namespace LoadWatch.Decoding.Fit;
 /// <summary>Cut, changed and invented bytes: a clear reason with its place, never a recording from a damaged part (I-3, I-10, I-11).</summary>
 public class FitDamageTests
 {
-    private static readonly byte[] TwoParts = [.. Parts.Activity(), .. Parts.Activity(FitHeaderStyle.WithoutChecksum)];
     private static readonly int Half = Parts.Activity().Length;
 
-    [Fact]
-    public void AFileCutAnywhereKeepsItsWholePartsOnly()
+    /// <summary>Three small files by their parts: two activities; everything that an activity may hold; an activity with beats in parts of their own.</summary>
+    private static readonly byte[][][] Files =
+    [
+        [Parts.Activity(), Parts.Activity(FitHeaderStyle.WithoutChecksum)],
+        [Rich()],
+        [Parts.Activity(FitHeaderStyle.TwelveBytes), Beats(1), Beats(2)],
+    ];
+
+    [Theory]
+    [InlineData(0, 2)]
+    [InlineData(1, 1)]
+    [InlineData(2, 1)]
+    public void AFileCutAnywhereKeepsItsWholePartsOnly(int number, int recordings)
     {
-        for (var length = 0; length <= TwoParts.Length; length++)
+        var parts = Files[number];
+        byte[] file = [.. parts.SelectMany(part => part)];
+        int[] ends = [.. parts.Select((_, i) => parts.Take(i + 1).Sum(part => part.Length))];
+        for (var length = 0; length <= file.Length; length++)
         {
-            var decoded = FitDecoder.Decode(TwoParts.AsMemory(0, length));
-            Assert.Equal(length / Half, decoded.Recordings.Count);
-            Assert.Equal(length % Half == 0 && length > 0, decoded.Problems.Count == 0);
+            var decoded = FitDecoder.Decode(file.AsMemory(0, length));
+            var whole = ends.Count(end => end <= length);
+            Assert.Equal(Math.Min(whole, recordings), decoded.Recordings.Count);
+            Assert.Equal(ends.Contains(length), decoded.Problems.Count == 0);
             Assert.All(decoded.Problems, problem => Assert.InRange(problem.ByteOffset!.Value, 0, length));
-            Assert.Equal(decoded.Problems.Count == 0, FitDecoder.CheckCompleteness(TwoParts.AsSpan(0, length)) == FitCompleteness.Complete);
+            Assert.Equal(decoded.Problems.Count == 0, FitDecoder.CheckCompleteness(file.AsSpan(0, length)) == FitCompleteness.Complete);
         }
     }
 
-    [Fact]
-    public void NoChangedBitGoesUnnoticed()
+    [Theory]
+    [InlineData(0, 2)]
+    [InlineData(1, 1)]
+    [InlineData(2, 1)]
+    public void NoChangedBitGoesUnnoticed(int number, int recordings)
     {
-        var whole = FitDecoder.Decode(TwoParts);
+        byte[] file = [.. Files[number].SelectMany(part => part)];
+        var whole = FitDecoder.Decode(file);
         Assert.Empty(whole.Problems);
-        Assert.Equal(2, whole.Recordings.Count);
-        for (var bit = 0; bit < TwoParts.Length * 8; bit++)
+        Assert.Equal(recordings, whole.Recordings.Count);
+        for (var bit = 0; bit < file.Length * 8; bit++)
         {
-            var bytes = TwoParts.ToArray();
+            var bytes = file.ToArray();
             bytes[bit / 8] ^= (byte)(1 << (bit % 8));
             var decoded = FitDecoder.Decode(bytes);
             Assert.NotEmpty(decoded.Problems);
-            Assert.True(decoded.Recordings.Count < 2, $"bit {bit}");
+            Assert.True(decoded.Recordings.Count < recordings || bit / 8 >= Files[number][0].Length, $"bit {bit}");
             Assert.Equal(FitCompleteness.Suspect, FitDecoder.CheckCompleteness(bytes));
         }
     }
@@ -133,6 +151,21 @@ public class FitDamageTests
         Assert.Empty(decoded.Recordings);
         Assert.Contains("more messages", Assert.Single(decoded.Problems).Reason, StringComparison.Ordinal);
     }
+
+    private static byte[] Rich() => Parts.Begin()
+        .Define(2, new(206, new(0, Unsigned8), new(1, Unsigned8), new(2, Unsigned8), new(6, Unsigned8), new(14, Unsigned16), new(15, Unsigned8)))
+        .Message(2, 0, 5, 0x84, 10, 20, 7)
+        .Define(0, new(20, new(253, Unsigned32), new(3, Unsigned8)) { BigEndian = true, Developer = [new(5, Unsigned16, 0)] })
+        .Message(0, Parts.Base, 90, 2500).Message(0, Parts.Base + 1, 91, 2600)
+        .Define(1, new(20, new(8, Bytes, 3), new(3, Unsigned8))).Compressed(1, (Parts.Base + 5) & 31, FitValue.None, 92)
+        .Define(3, new(78, new FitFieldLayout(0, Unsigned16, 3))).Message(3, FitValue.Many(700, 710, null))
+        .Define(4, new(225, new(254, Unsigned32), new(0, Unsigned32), new(7, Unsigned16, 2))).Message(4, Parts.Base, 30_000, FitValue.Many(28, null))
+        .DefineSession().Message(1, Parts.Base, 1, 0, 1000, 1000)
+        .ToBytes();
+
+    private static byte[] Beats(int second) => new FitPartWriter()
+        .Define(0, new(132, new(253, Unsigned32), new(9, Unsigned32), new(6, Unsigned8))).Message(0, Parts.Base + second, 1024 * second, 70)
+        .ToBytes();
 
     private static byte[] Defined(byte message, byte endian, byte[] fields, byte[] data) =>
         [0x40, 0, (byte)(endian & 1), .. (endian & 1) != 0 ? new byte[] { 0, message } : [message, 0],

@@ -33,8 +33,8 @@ public sealed class BasisPartsTests
         Assert.Equal(Sorted(["Person", "Date", "Kind", "Value", "Source", "Exercise", "Note", "Machine"]), Properties(typeof(Anchor)));
 
     [Fact]
-    public void OfAnInboxNameAndPatternCount() =>
-        Assert.Equal(Sorted(["Name", "FilePattern", "Path", "Take", "Marker"]), Properties(typeof(Inbox)));
+    public void OfAnInboxNamePatternAndSalvageCount() =>
+        Assert.Equal(Sorted(["Name", "FilePattern", "Path", "Take", "Marker", "Salvage"]), Properties(typeof(Inbox)));
 
     private static IReadOnlyList<string> Properties(Type type) => Sorted(type.GetProperties().Select(property => property.Name));
 
