@@ -28,7 +28,7 @@ public class MemoryTests
     public void EveryWorstFileIsRead()
     {
         Assert.SkipUnless(IsChild, "part of another test");
-        Assert.DoesNotContain(WorstInputs.All, worst => !IsReadWithin(worst.Make()));
+        Assert.Empty(WorstInputs.All.Where(worst => !IsReadWithin(worst.Make())).Select(worst => worst.Name));
     }
 
     [Fact]

@@ -9,12 +9,12 @@ namespace LoadWatch.Decoding.Csv.Tables;
 /// </summary>
 internal sealed class KeyedRows(TableKind kind)
 {
-    // More people than one table names; it only spares work.
-    private const int FoldedAtMost = 5_000;
-
     private readonly List<TableRow?> rows = [];
     private readonly Dictionary<(string Subject, string Key), Known> known = [];
     private readonly Dictionary<string, string> folded = new(StringComparer.Ordinal);
+
+    /// <summary>Different subjects, as written.</summary>
+    public int Subjects => folded.Count;
 
     /// <summary>Rows that count.</summary>
     public int Count { get; private set; }
@@ -64,10 +64,7 @@ internal sealed class KeyedRows(TableKind kind)
         if (!folded.TryGetValue(subject ?? "", out var upper))
         {
             upper = (subject ?? "").ToUpperInvariant();
-            if (folded.Count < FoldedAtMost)
-            {
-                folded[subject ?? ""] = upper;
-            }
+            folded[subject ?? ""] = upper;
         }
 
         return upper;

@@ -10,8 +10,11 @@ internal sealed class TableReading
     // About 450 bytes a row with its key, measured: so many stay near the 192 MB that a file of 32 MB may take.
     private const int RowsAtMost = 400_000;
     private const int BytesOfRow = 450;
-    private const long BytesBeside = 40L << 20;
+    private const long BytesBeside = 32L << 20;
     private const int TimesFile = 3;
+
+    /// <summary>More is no club but a column that means something else.</summary>
+    private const int SubjectsAtMost = 5_000;
 
     private const int BadRowsAllowed = 3;
     private const int BadPercentAllowed = 10;
@@ -40,7 +43,7 @@ internal sealed class TableReading
         shared = RowPlace.Shared(table, layout, kind);
         keyed = new KeyedRows(kind);
 
-        // Below rows of some hundred bytes it is memory that sets the limit: 150,000 rows of sixty bytes.
+        // Below rows of some hundred bytes it is memory that sets the limit: 120,000 rows of sixty bytes.
         rowsAtMost = Math.Min(RowsAtMost, (BytesBeside + (TimesFile * table.Text.Source.Length)) / BytesOfRow);
     }
 
@@ -70,6 +73,11 @@ internal sealed class TableReading
             if (keyed.Count >= rowsAtMost)
             {
                 return RowShape.Refusal($"more than {rowsAtMost} rows{(rowsAtMost < RowsAtMost ? ", the most of a file of its size" : "")}", rows.Line);
+            }
+
+            if (keyed.Subjects > SubjectsAtMost)
+            {
+                return RowShape.Refusal($"more than {SubjectsAtMost} people in one table", rows.Line);
             }
 
             if (NamesAgain(rows) is { } again)
