@@ -40,7 +40,7 @@ public sealed class DecoderSet(IReadOnlyList<CsvLayout> layouts, ContainerLimits
     public Completeness CheckCompleteness(ReadOnlyMemory<byte> bytes) => Recognise(bytes.Span) switch
     {
         ContentKind.Fit => When(FitDecoder.CheckCompleteness(bytes.Span) == FitCompleteness.Complete),
-        ContentKind.Gzip => When(Gzip.Unpack(bytes, "", limits).Problems.Count == 0),
+        ContentKind.Gzip => When(Gzip.IsWhole(bytes, limits)),
         ContentKind.Zip => When(ZipDirectory.Read(bytes.Span, limits).Fault is null),
         _ => Completeness.NeedsSettling,
     };
@@ -55,6 +55,9 @@ public sealed class DecoderSet(IReadOnlyList<CsvLayout> layouts, ContainerLimits
         ContentKind.Zip => Refused("zip", "a zip file is unpacked first"),
         _ => Refused("unknown", bytes.IsEmpty ? "the file is empty" : "not a FIT, CSV, gzip or zip file"),
     };
+
+    /// <inheritdoc cref="CsvDecoder.Read"/>
+    public CsvReadThrough ReadText(Func<Stream> open, Action<Recording> take) => CsvDecoder.Read(open, layouts, take);
 
     /// <summary>Unpacks a gzip or zip file; its members are contents of their own.</summary>
     /// <param name="bytes">The whole content.</param>

@@ -11,6 +11,9 @@ internal sealed class DatabaseFile(string path)
     private readonly string? id = IdOf(path);
     private string? logId;
 
+    /// <summary>Bytes of the write-ahead log, as of the last commit.</summary>
+    public long LogBytes { get; private set; }
+
     /// <exception cref="DurabilityLostException">The name no longer leads to what is open.</exception>
     public void Check()
     {
@@ -21,7 +24,12 @@ internal sealed class DatabaseFile(string path)
     }
 
     /// <summary>To be called after a commit: the log is there then, and stays while the database is open.</summary>
-    public void NoteLog() => logId ??= IdOf(LogPath);
+    public void NoteLog()
+    {
+        var log = SafeFile.StampOf(LogPath);
+        logId ??= log?.FileId;
+        LogBytes = log?.Size ?? 0;
+    }
 
     private string LogPath => path + "-wal";
 

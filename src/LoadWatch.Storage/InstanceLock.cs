@@ -7,6 +7,8 @@ namespace LoadWatch.Storage;
 /// <summary>Held by the one process that may take in files and evaluate. The system frees it when the process ends, however it ends.</summary>
 public sealed class InstanceLock : IDisposable
 {
+    private const int SharingViolation = unchecked((int)0x80070020);
+
     private readonly FileStream file;
 
     private InstanceLock(FileStream file) => this.file = file;
@@ -38,11 +40,14 @@ public sealed class InstanceLock : IDisposable
             // Windows would keep the holder's number from being read with None; Read keeps writers out all the same.
             return PrivateFiles.OpenOrCreate(path, OperatingSystem.IsWindows() ? FileShare.Read : FileShare.None);
         }
-        catch (IOException) when (File.Exists(path))
+        catch (IOException e) when (IsHeld(e))
         {
             throw new InstanceRunningException(path, ReadProcessId(path));
         }
     }
+
+    /// <summary>A disk that is full or fails is no other process. EWOULDBLOCK of the lock, or the sharing violation of Windows.</summary>
+    internal static bool IsHeld(IOException error) => error.HResult == (OperatingSystem.IsWindows() ? SharingViolation : Errno.WouldBlock);
 
     private static int? ReadProcessId(string path)
     {

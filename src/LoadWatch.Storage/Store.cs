@@ -7,12 +7,17 @@ namespace LoadWatch.Storage;
 /// <summary>The database: one writer at a time, readers beside it. Safe to use from several threads.</summary>
 public sealed class Store : IDisposable
 {
+    /// <summary>The log is emptied into the database when it has grown by so much. A choice: twice what the engine would do by itself.</summary>
+    internal const long LogMayGrowBytes = 8L * 1024 * 1024;
+
     private readonly Dialect dialect;
     private readonly DatabaseFile file;
     private readonly DbConnection? writer;
     private readonly Lock writing = new();
     private readonly ConcurrentBag<DbConnection> idleReaders = [];
     private DurabilityLostException? lost;
+    private long emptiedAt = LogMayGrowBytes;
+    private bool isSettled;
     private long rowsRead;
 
     private Store(Dialect dialect, DatabaseFile file, bool toWrite)
@@ -62,25 +67,9 @@ public sealed class Store : IDisposable
     {
         lock (writing)
         {
-            RefuseAfterLoss();
-            try
-            {
-                using var transaction = dialect.BeginWrite(Writer);
-                var result = work(new StoreSession(dialect, Writer, transaction, CountRows));
-                file.Check();
-                transaction.Commit();
-                file.NoteLog();
-                return result;
-            }
-            catch (DbException error) when (dialect.LostDurability(error))
-            {
-                throw lost = new DurabilityLostException(error);
-            }
-            catch (DurabilityLostException error)
-            {
-                lost = error;
-                throw;
-            }
+            var result = Trusted(() => Commit(work));
+            EmptyGrownLog();
+            return result;
         }
     }
 
@@ -106,10 +95,16 @@ public sealed class Store : IDisposable
     {
         lock (writing)
         {
-            RefuseAfterLoss();
-            return dialect.Checkpoint(Writer);
+            return Trusted(() => dialect.Checkpoint(Writer));
         }
     }
+
+    /// <summary>
+    /// To be called when the work is done: brings what the log holds into the database, so that nothing is left to do when it is closed. An error then would
+    /// be told to nobody.
+    /// </summary>
+    /// <exception cref="DurabilityLostException">The disk failed to keep what it was given.</exception>
+    public void Settle() => isSettled = Checkpoint();
 
     /// <summary>What the engine finds wrong with its own file, in its words; empty when nothing. It reads all of it, and others may write meanwhile.</summary>
     public IReadOnlyList<string> Check()
@@ -129,24 +124,69 @@ public sealed class Store : IDisposable
     {
         while (idleReaders.TryTake(out var reader))
         {
-            Close(reader);
+            reader.Dispose();
         }
 
-        if (writer is not null)
+        if (writer is not null && isSettled && lost is null)
         {
-            Close(writer);
+            dialect.RemoveEmptyLog(writer);
+        }
+
+        writer?.Dispose();
+    }
+
+    private T Commit<T>(Func<StoreSession, T> work)
+    {
+        using var transaction = dialect.BeginWrite(Writer);
+        var result = work(new StoreSession(dialect, Writer, transaction, CountRows));
+        file.Check();
+        transaction.Commit();
+        isSettled = false;
+        file.NoteLog();
+        return result;
+    }
+
+    /// <summary>The engine would do this by itself within a commit, and keep a failed sync to itself.</summary>
+    private void EmptyGrownLog()
+    {
+        if (file.LogBytes < emptiedAt)
+        {
+            return;
+        }
+
+        // Where a reader is in the way, or the disk is full, what was committed stays in the log, and the log may grow once more.
+        emptiedAt = IsEmptied() ? LogMayGrowBytes : file.LogBytes + LogMayGrowBytes;
+    }
+
+    private bool IsEmptied()
+    {
+        try
+        {
+            return Trusted(() => dialect.Checkpoint(Writer));
+        }
+        catch (DbException)
+        {
+            return false;
         }
     }
 
-    /// <summary>The last to close would else empty the log into the database, of which nobody knows any more what of it is on the disk.</summary>
-    private void Close(DbConnection connection)
+    /// <summary>Remembers when the disk has failed: from then on nothing is written.</summary>
+    private T Trusted<T>(Func<T> work)
     {
-        if (lost is not null)
+        RefuseAfterLoss();
+        try
         {
-            dialect.LeaveLog(connection);
+            return work();
         }
-
-        connection.Dispose();
+        catch (DbException error) when (dialect.LostDurability(error))
+        {
+            throw lost = new DurabilityLostException(error);
+        }
+        catch (DurabilityLostException error)
+        {
+            lost = error;
+            throw;
+        }
     }
 
     private DbConnection Writer => writer ?? throw new InvalidOperationException("the store was opened to be read only");

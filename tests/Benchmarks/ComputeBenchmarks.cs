@@ -31,7 +31,7 @@ public class ComputeBenchmarks
     public RecordingSummary Summarize() => RecordingSummaries.Of("", new UsableRecording(recording, 0.5), LongRide.Person, sourceName: null);
 
     [Benchmark]
-    public string? Judge() => Plausibility.Of(recording, LongRide.Person, LongRide.Anchors, LongRide.Date);
+    public string? Judge() => Plausibility.Of(new UsableRecording(recording, 0.5), LongRide.Person, LongRide.Anchors, LongRide.Date);
 
     [Benchmark]
     public ActivityValues Compute() => ActivityComputation.Compute(recording, LongRide.Person, LongRide.Anchors, Settings);

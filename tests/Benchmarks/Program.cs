@@ -3,9 +3,15 @@ using LoadWatch.Benchmarks.Imports;
 
 // dotnet run -c Release --project tests/Benchmarks -- --filter '*' --job short
 // dotnet run -c Release --project tests/Benchmarks -- import
+// dotnet run -c Release --project tests/Benchmarks -- worst
 if (args is [ImportBenchmark.Name, .. var rest])
 {
     return ImportBenchmark.Run(rest);
+}
+
+if (args is [WorstFiles.Name])
+{
+    return WorstFiles.Run();
 }
 
 BenchmarkSwitcher.FromAssembly(typeof(Program).Assembly).Run(args);

@@ -93,6 +93,84 @@ public sealed class DurabilityTests : IDisposable
         Assert.Contains("deleted or replaced", lost.Message, StringComparison.Ordinal);
     }
 
+    /// <summary>What the engine does when a database is closed it tells nobody, a failed sync neither: so it does nothing then.</summary>
+    [Fact]
+    public void ClosingLeavesTheLogToWhoOpensNext()
+    {
+        using (var store = Store.Open(folder))
+        {
+            store.Write(session => session.Arrivals.AddWaiting(Some.Sha(1), null, Some.Sha(1), 10));
+        }
+
+        Assert.NotEqual(0, new FileInfo(folder.DatabasePath + "-wal").Length);
+        using var next = Store.Open(folder);
+        Assert.Single(next.Read(session => session.Arrivals.All()));
+    }
+
+    [Fact]
+    public void ASettledDatabaseIsWholeByItself()
+    {
+        using (var store = Store.Open(folder))
+        {
+            store.Write(session => session.Arrivals.AddWaiting(Some.Sha(1), null, Some.Sha(1), 10));
+            store.Read(session => session.Arrivals.All());
+            store.Settle();
+        }
+
+        Assert.Equal([folder.DatabasePath], Directory.EnumerateFiles(folder.Root, "loadwatch.db*"));
+        using var next = Store.Open(folder);
+        Assert.Single(next.Read(session => session.Arrivals.All()));
+    }
+
+    [Fact]
+    public void WhatIsWrittenBehindTheSettlingIsKeptToo()
+    {
+        using (var store = Store.Open(folder))
+        {
+            store.Settle();
+            store.Write(session => session.Arrivals.AddWaiting(Some.Sha(1), null, Some.Sha(1), 10));
+        }
+
+        using var next = Store.Open(folder);
+        Assert.Single(next.Read(session => session.Arrivals.All()));
+    }
+
+    [Fact]
+    public void TheLogIsEmptiedWhenItHasGrown()
+    {
+        using var store = Store.Open(folder);
+        var (log, largest) = (new FileInfo(folder.DatabasePath + "-wal"), 0L);
+        for (var megabyte = 0; megabyte < 20; megabyte++)
+        {
+            store.Write(session => session.Audits.Add("taken_in", new string('x', 1024 * 1024), Some.Moment));
+            log.Refresh();
+            largest = Math.Max(largest, log.Length);
+        }
+
+        Assert.InRange(largest, Store.LogMayGrowBytes / 2, Store.LogMayGrowBytes);
+    }
+
+    /// <summary>The log then grows once more by as much before it is tried again; the commit stands.</summary>
+    [Fact]
+    public void AReaderThatIsInTheWayOfEmptyingTheLogHoldsUpNoCommit()
+    {
+        using var store = Store.Open(folder);
+        store.Read(session =>
+        {
+            Assert.Empty(session.Audits.All());
+            for (var megabyte = 0; megabyte < 12; megabyte++)
+            {
+                store.Write(writing => writing.Audits.Add("taken_in", new string('x', 1024 * 1024), Some.Moment));
+            }
+
+            return 0;
+        });
+
+        Assert.False(new FileInfo(folder.DatabasePath + "-wal").Length < Store.LogMayGrowBytes);
+        Assert.True(store.Checkpoint());
+        Assert.Equal(12, store.Read(session => session.Audits.All()).Count);
+    }
+
     [Fact]
     public void AReaderMakesNoNewDatabase()
     {
@@ -165,6 +243,7 @@ public sealed class DurabilityTests : IDisposable
         using (var store = Store.Open(folder))
         {
             store.Write(session => Enumerable.Range(1, 500).ToList().ForEach(i => session.Arrivals.AddWaiting(Some.Sha(i), null, Some.Sha(i), 10)));
+            store.Settle();
         }
 
         using (var file = new FileStream(folder.DatabasePath, FileMode.Open))

@@ -21,6 +21,18 @@ public sealed class InstanceLockTests : IDisposable
         Assert.Contains($"process {Environment.ProcessId} ", refused.Message, StringComparison.Ordinal);
     }
 
+    /// <summary>By the numbers of errors of Linux (errno-base.h): held by another, input or output, no room, too many handles.</summary>
+    [Theory]
+    [InlineData(11, true)]
+    [InlineData(5, false)]
+    [InlineData(28, false)]
+    [InlineData(24, false)]
+    public void ALockThatADiskOrTheSystemRefusesIsNoOtherProcess(int error, bool isHeld)
+    {
+        Assert.SkipWhen(OperatingSystem.IsWindows(), "Windows has numbers of its own");
+        Assert.Equal(isHeld, InstanceLock.IsHeld(new IOException("the lock cannot be opened", error)));
+    }
+
     [Fact]
     public void AFreedLockCanBeTakenAgain()
     {

@@ -1,6 +1,7 @@
 using System.Globalization;
 using LoadWatch.Loads;
 using LoadWatch.People;
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 using LoadWatch.Stimulus;
 using NodaTime;
@@ -11,12 +12,12 @@ namespace LoadWatch.Activities;
 public static class ActivityComputation
 {
     /// <summary>Raised by one whenever a formula, a cut or a quantity changes: what an older program computed is then computed again.</summary>
-    public const int Version = 5;
+    public const int Version = 6;
 
     /// <summary>Anchors are taken as they hold on the recording's local date.</summary>
     /// <exception cref="ArgumentException">The recording carries no date.</exception>
     public static ActivityValues Compute(Recording recording, Person person, AnchorBook anchors, ComputationSettings settings) =>
-        Compute(new UsableRecording(recording, settings.UsableShareWanted), person, anchors, settings);
+        Compute(new UsableRecording(recording, settings.UsableShareWanted, settings.Quality), person, anchors, settings);
 
     /// <param name="cut">The recording after the quality cuts.</param>
     /// <inheritdoc cref="Compute(Recording, Person, AnchorBook, ComputationSettings)"/>
@@ -24,7 +25,9 @@ public static class ActivityComputation
     {
         ArgumentNullException.ThrowIfNull(cut);
         var date = LocalStart.Of(cut.Recording, person).Date;
-        var usable = person.HeartRateIsValidOn(date) ? cut : new UsableRecording(WithoutHeartRate(cut.Recording), settings.UsableShareWanted);
+        var usable = person.HeartRateIsValidOn(date)
+            ? UpToMaximum(cut, HeartRateMaximum.On(date, person, anchors), settings.Quality)
+            : new UsableRecording(WithoutHeartRate(cut.Recording), settings.UsableShareWanted, settings.Quality);
         var loads = ActivityLoads.Of(usable, date, person, anchors, settings);
         var stimulus = SessionStimulus.Of(usable, date, person, anchors, settings);
         return new ActivityValues
@@ -34,6 +37,7 @@ public static class ActivityComputation
             PowerMeanWatts = Mean(usable[Channel.Power]),
             PowerMaxWatts = Significant.Round(Largest(usable[Channel.Power])),
             UsableShare = usable.Channels.Values.ToDictionary(channel => channel.Channel, channel => Significant.Round(channel.Share)),
+            Cuts = usable.Cuts,
             Histograms = usable.Histograms,
             TimesInZone = loads.TimesInZone,
             Quantities = loads.Quantities,
@@ -41,6 +45,10 @@ public static class ActivityComputation
             Remarks = [.. usable.TooLittle.Select(TooLittle), .. loads.Remarks, .. stimulus.Remarks, .. loads.HistogramRemarks],
         };
     }
+
+    /// <summary>Without what is too far above the person's maximum; where none is known all of it stays.</summary>
+    private static UsableRecording UpToMaximum(UsableRecording cut, HeartRateMaximum? maximum, QualityLimits limits) =>
+        maximum is null ? cut : cut.WithHeartRateUpTo(maximum.Bpm + limits.HeartRateAboveMaximumBpm);
 
     /// <summary>Where heart rate says nothing about the person's effort, it is as if it had not been recorded.</summary>
     private static Recording WithoutHeartRate(Recording recording) =>

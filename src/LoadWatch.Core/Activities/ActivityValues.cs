@@ -1,4 +1,5 @@
 using LoadWatch.Loads;
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 using LoadWatch.Stimulus;
 
@@ -19,6 +20,9 @@ public sealed record ActivityValues
 
     /// <summary>Share of the sampled time with a usable reading, 0 to 1, for each channel that the recording holds.</summary>
     public IReadOnlyDictionary<Channel, double> UsableShare { get; init; } = new Dictionary<Channel, double>();
+
+    /// <summary>What of the recording does not count, where, and why: whole rows and time without rows first, then by channel, reason and time.</summary>
+    public IReadOnlyList<Cut> Cuts { get; init; } = [];
 
     /// <summary>Of heart rate, power and speed, where usable.</summary>
     public IReadOnlyDictionary<Channel, Histogram> Histograms { get; init; } = new Dictionary<Channel, Histogram>();

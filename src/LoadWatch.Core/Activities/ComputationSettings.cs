@@ -1,3 +1,4 @@
+using LoadWatch.Quality;
 using LoadWatch.Stimulus;
 
 namespace LoadWatch.Activities;
@@ -8,6 +9,9 @@ public sealed record ComputationSettings
     /// <summary>Share of the sampled time that must hold a usable reading before a channel gives a load or a stimulus, 0 to 1. A
     /// choice.</summary>
     public double UsableShareWanted { get; init; } = 0.5;
+
+    /// <summary>From when on a reading is none.</summary>
+    public QualityLimits Quality { get; init; } = new();
 
     /// <summary>Inner bounds of the heart-rate zones as fractions of heart-rate reserve where thresholds are not anchored (ACSM classes,
     /// Garber 2011).</summary>

@@ -5,11 +5,15 @@ namespace LoadWatch.Activities;
 /// <summary>Beats that came in messages of their own join the samples at their own times.</summary>
 internal static class LateBeatRows
 {
-    /// <summary>The heart rates of the dated samples, NaN for none, and behind them the beats; within one second a usable reading of the samples wins.</summary>
+    /// <summary>
+    /// The heart rates of the dated samples, NaN for none, and behind them the beats; within one second a usable reading of the samples wins, and a beat stands
+    /// in the place of one that is not.
+    /// </summary>
     public static (long[] Times, double[] HeartRates) With(SampleSeries samples, IReadOnlyList<TimedHeartRate> late)
     {
         var (times, rates) = Dated(samples);
-        HashSet<long> taken = [];
+        var rows = times.Count;
+        var (taken, beaten) = (new HashSet<long>(), new HashSet<long>());
         for (var row = 0; row < times.Count; row++)
         {
             if (ChannelLimits.Usable(Channel.HeartRate, rates[row], Sport.Generic))
@@ -24,7 +28,13 @@ internal static class LateBeatRows
             {
                 times.Add(beat.UnixMilliseconds);
                 rates.Add(beat.BeatsPerMinute);
+                beaten.Add(Second(beat.UnixMilliseconds));
             }
+        }
+
+        for (var row = 0; row < rows && beaten.Count > 0; row++)
+        {
+            rates[row] = beaten.Contains(Second(times[row])) ? double.NaN : rates[row];
         }
 
         return ([.. times], [.. rates]);

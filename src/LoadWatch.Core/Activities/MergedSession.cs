@@ -1,4 +1,5 @@
 using System.Globalization;
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Activities;
@@ -9,9 +10,10 @@ public static class MergedSession
     private const double MostOf = 0.9;
 
     /// <summary>The winner's own recording where it gives everything. Laps, lengths and pauses are the winner's.</summary>
-    /// <param name="recordings">By key: at least those that give.</param>
+    /// <param name="recordings">By key: at least those that give. Each is judged by itself: what it gives is judged already.</param>
+    /// <param name="limits">Null for the defaults.</param>
     /// <returns>Null where no recording gives anything.</returns>
-    public static Recording? Of(SessionPlan plan, IReadOnlyDictionary<string, Recording> recordings)
+    public static Recording? Of(SessionPlan plan, IReadOnlyDictionary<string, Recording> recordings, QualityLimits? limits = null)
     {
         ArgumentNullException.ThrowIfNull(plan);
         if (plan.Contributions[0] is { Role: ContributionRole.Wins, Gifts: null } winner)
@@ -20,7 +22,14 @@ public static class MergedSession
         }
 
         var givers = plan.Givers.Select(key => recordings[key]).ToList();
-        return givers.Count == 0 ? null : givers[0] with
+        if (givers.Count == 0)
+        {
+            return null;
+        }
+
+        var judged = plan.Givers.ToDictionary(key => key, key => new JudgedRecording(recordings[key], limits ?? new QualityLimits()), StringComparer.Ordinal);
+        var channels = Gifts(plan).Where(one => one.Gift.Channel is not null).ToLookup(one => one.Gift.Channel!.Value);
+        return givers[0] with
         {
             Start = plan.Frame.Start,
             LocalOffset = plan.Winner.LocalOffset,
@@ -29,9 +38,10 @@ public static class MergedSession
             DistanceMetres = plan.Frame.DistanceMetres,
             Sport = plan.Frame.Sport,
             Samples = SampleSeries.Empty,
-            Gathered = Gifts(plan).Where(one => one.Gift.Channel is not null).GroupBy(one => one.Gift.Channel!.Value).ToDictionary(
+            Gathered = channels.ToDictionary(
                 channel => channel.Key,
-                channel => Series(channel.Key, channel.SelectMany(one => one.Gift.Stretches.Select(stretch => (recordings[one.Key], stretch))))),
+                channel => Series(channel.Key, channel.SelectMany(one => one.Gift.Stretches.Select(stretch => (judged[one.Key][channel.Key], stretch))))),
+            GatheredPauses = channels.ToDictionary(channel => channel.Key, channel => Pauses(channel, recordings)),
             LateHeartRates = [],
             Sets = [.. Gifts(plan).Where(one => one.Gift.Whole == WholeGift.Sets).SelectMany(one => recordings[one.Key].Sets)],
         };
@@ -50,14 +60,17 @@ public static class MergedSession
     private static IEnumerable<(string Key, Gift Gift)> Gifts(SessionPlan plan) =>
         plan.Contributions.SelectMany(one => (one.Gifts ?? []).Select(gift => (one.Key, gift)));
 
+    private static IReadOnlyList<Pause> Pauses(IEnumerable<(string Key, Gift Gift)> gifts, IReadOnlyDictionary<string, Recording> recordings) =>
+        [.. gifts.SelectMany(one => one.Gift.Stretches.SelectMany(stretch => StoppedTimes.Within(recordings[one.Key].Pauses, stretch)))];
+
     /// <param name="given">Stretches do not overlap.</param>
-    private static SampleSeries Series(Channel channel, IEnumerable<(Recording Recording, Stretch Stretch)> given)
+    private static SampleSeries Series(Channel channel, IEnumerable<(JudgedChannel Readings, Stretch Stretch)> given)
     {
         var rows = new List<(long UnixMilliseconds, double Value)>();
         long? end = null;
-        foreach (var (recording, stretch) in given.OrderBy(one => one.Stretch.From is not null).ThenBy(one => one.Stretch.From))
+        foreach (var (readings, stretch) in given.OrderBy(one => one.Stretch.From is not null).ThenBy(one => one.Stretch.From))
         {
-            var next = UsableSamples.Rows(recording, channel, stretch).ToList();
+            var next = readings.Rows(stretch).ToList();
             if (next.Count == 0)
             {
                 continue;

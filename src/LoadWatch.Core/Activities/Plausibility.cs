@@ -28,19 +28,20 @@ public static class Plausibility
     /// Why the recording should be held, or null where it may be the person's own or no anchor says anything. Top speed: the highest held
     /// for 1 s, on foot and in team sports, against the anchor whatever its source. Heart rate: against a measured maximum only.
     /// </summary>
+    /// <param name="recording">After the quality cuts, whatever share of it is left.</param>
     /// <param name="date">The recording's local date: anchors are taken as they hold on it.</param>
-    public static string? Of(Recording recording, Person person, AnchorBook anchors, LocalDate date) =>
+    public static string? Of(UsableRecording recording, Person person, AnchorBook anchors, LocalDate date) =>
         TooFast(recording, anchors.On(date, person.Id, AnchorKind.SpeedMax))
         ?? TooHigh(recording, anchors.On(date, person.Id, AnchorKind.HeartRateMax));
 
-    private static string? TooFast(Recording recording, Anchor? anchor)
+    private static string? TooFast(UsableRecording usable, Anchor? anchor)
     {
-        if (anchor is null || !(recording.Sport.IsOnFoot || recording.Sport.IsTeamSport))
+        if (anchor is null || !(usable.Recording.Sport.IsOnFoot || usable.Recording.Sport.IsTeamSport) || !usable.Channels.TryGetValue(Channel.Speed, out var speed))
         {
             return null;
         }
 
-        return HeldForThree(UsableSamples.Of(recording, Channel.Speed)) is { } top && top > TopSpeedFrom && top > TimesTopSpeed * anchor.Value
+        return HeldForThree(speed) is { } top && top > TopSpeedFrom && top > TimesTopSpeed * anchor.Value
             ? string.Create(CultureInfo.InvariantCulture, $"top speed {top:0.0} m/s where {anchor.Value:0.0} m/s is the person's: of another person?")
             : null;
     }
@@ -63,14 +64,14 @@ public static class Plausibility
         return Math.Min(top, three);
     }
 
-    private static string? TooHigh(Recording recording, Anchor? anchor)
+    private static string? TooHigh(UsableRecording usable, Anchor? anchor)
     {
-        if (anchor is not { Source: AnchorSource.Measured })
+        if (anchor is not { Source: AnchorSource.Measured } || !usable.Channels.TryGetValue(Channel.HeartRate, out var heartRate))
         {
             return null;
         }
 
-        return High(UsableSamples.Of(recording, Channel.HeartRate)) is { } bpm && bpm > anchor.Value + AboveHeartRateMaxBpm
+        return High(heartRate) is { } bpm && bpm > anchor.Value + AboveHeartRateMaxBpm
             ? string.Create(CultureInfo.InvariantCulture, $"heart rate {bpm} bpm where {anchor.Value:0} bpm is the person's maximum: of another person?")
             : null;
     }

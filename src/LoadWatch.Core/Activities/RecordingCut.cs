@@ -1,3 +1,4 @@
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 using NodaTime;
 
@@ -5,7 +6,12 @@ namespace LoadWatch.Activities;
 
 /// <summary>A recording without what lies outside a window.</summary>
 /// <param name="LeftOut">What was left out, one phrase each: <c>38 min after the planned session left out</c>; empty where nothing was.</param>
-public sealed record CutRecording(Recording Recording, IReadOnlyList<string> LeftOut);
+/// <param name="Cuts">The same as cuts: <see cref="CutReason.OutsidePlan"/>, shares of the time from the first moment to the last.</param>
+public sealed record CutRecording(Recording Recording, IReadOnlyList<string> LeftOut, IReadOnlyList<Cut> Cuts)
+{
+    /// <summary>A recording of which nothing was left out.</summary>
+    public static CutRecording Nothing(Recording recording) => new(recording, [], []);
+}
 
 /// <summary>Cuts a recording to the time of a planned session.</summary>
 public static class RecordingCut
@@ -23,14 +29,32 @@ public static class RecordingCut
         var (early, late) = (moments.FindAll(time => time < from), moments.FindAll(time => time > to));
         if (early.Count + late.Count == 0)
         {
-            return new CutRecording(recording, []);
+            return CutRecording.Nothing(recording);
         }
 
         var rest = Within(recording, from, to);
         return HoldsUsable(rest)
-            ? new CutRecording(rest, [.. Phrase(early, from, "before"), .. Phrase(late, to, "after")])
-            : new CutRecording(recording, []);
+            ? new CutRecording(rest, [.. Phrase(early, from, "before"), .. Phrase(late, to, "after")], [.. OutsideCuts(recording, moments, from, to)])
+            : CutRecording.Nothing(recording);
     }
+
+    private static IEnumerable<Cut> OutsideCuts(Recording recording, List<Instant> moments, Instant from, Instant to)
+    {
+        var (first, last) = (moments.Min(), moments.Max());
+        // A moment on an edge belongs to the session.
+        var millisecond = Duration.FromMilliseconds(1);
+        Stretch[] outside = [Outside(first, Instant.Min(from, last)), Outside(Instant.Max(to + millisecond, first), last + millisecond)];
+        var whole = (last - first).TotalMilliseconds;
+        return outside
+            .Where(stretch => stretch.From < stretch.To)
+            .Select(stretch => new Cut(
+                null, CutReason.OutsidePlan, stretch, Rows(recording, stretch), stretch.To!.Value - stretch.From!.Value, Significant.Round((stretch.To.Value - stretch.From.Value) / whole)));
+    }
+
+    private static Stretch Outside(Instant start, Instant end) => new(start.ToUnixTimeMilliseconds(), end.ToUnixTimeMilliseconds());
+
+    private static int Rows(Recording recording, Stretch stretch) =>
+        recording.Gathered.Values.Append(recording.Samples).Max(series => series.Times.Count(time => time != SampleSeries.Undated && stretch.Holds(time)));
 
     private static IEnumerable<Instant> Moments(Recording recording) =>
     [

@@ -1,3 +1,4 @@
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Activities;
@@ -10,7 +11,7 @@ public sealed class UsableChannel
     private readonly int[] milliseconds;
 
     /// <param name="samples">Usable readings in time order.</param>
-    /// <param name="share">Time of the usable readings over the time of all dated rows, 0 to 1.</param>
+    /// <param name="share">Time of the usable readings over the sampled time, 0 to 1.</param>
     public UsableChannel(Channel channel, IReadOnlyList<UsableSample> samples, double share)
         : this(
             channel,
@@ -36,8 +37,11 @@ public sealed class UsableChannel
     /// <summary>Number of usable readings.</summary>
     public int Count { get; }
 
-    /// <summary>Time of the usable readings over the time of all dated rows, 0 to 1.</summary>
+    /// <summary>Time of the usable readings over the sampled time: that of all dated rows while the timer ran, 0 to 1.</summary>
     public double Share { get; }
+
+    /// <summary>What of the channel is not usable, by reason, then by time; with <see cref="Share"/> their shares add up to 1.</summary>
+    public IReadOnlyList<Cut> Cuts { get; init; } = [];
 
     /// <summary>When each was taken, milliseconds since 1970-01-01T00:00:00Z.</summary>
     public ReadOnlySpan<long> UnixMilliseconds => times.AsSpan(0, Count);
@@ -61,7 +65,7 @@ public sealed class UsableChannel
         }
 
         // The last stands for none; mostly it is the only one.
-        return held == Count - 1 && milliseconds[held] == 0 ? new UsableChannel(Channel, times, values, milliseconds, held, Share) : Without0(held);
+        return held == Count - 1 && milliseconds[held] == 0 ? new UsableChannel(Channel, times, values, milliseconds, held, Share) { Cuts = Cuts } : Without0(held);
     }
 
     private UsableChannel Without0(int held)
@@ -76,7 +80,7 @@ public sealed class UsableChannel
             }
         }
 
-        return new UsableChannel(Channel, heldTimes, heldValues, heldMilliseconds, held, Share);
+        return new UsableChannel(Channel, heldTimes, heldValues, heldMilliseconds, held, Share) { Cuts = Cuts };
     }
 }
 

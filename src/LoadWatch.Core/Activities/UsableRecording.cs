@@ -1,3 +1,4 @@
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Activities;
@@ -8,13 +9,21 @@ public sealed class UsableRecording
     private static readonly Channel[] Counted = [Channel.HeartRate, Channel.Power, Channel.Speed];
 
     private readonly double shareWanted;
+    private readonly JudgedRecording judged;
 
-    public UsableRecording(Recording recording, double shareWanted)
+    /// <param name="limits">Null for the defaults.</param>
+    public UsableRecording(Recording recording, double shareWanted, QualityLimits? limits = null)
+        : this(recording, shareWanted, new JudgedRecording(recording, limits ?? new QualityLimits()), heartRate: null)
+    {
+    }
+
+    private UsableRecording(Recording recording, double shareWanted, JudgedRecording judged, JudgedChannel? heartRate)
     {
         this.shareWanted = shareWanted;
+        this.judged = judged;
         Recording = recording;
-        var timeline = SampleTimeline.Of(recording.Samples.Times);
-        Channels = UsableSamples.ChannelsOf(recording).ToDictionary(channel => channel, channel => UsableSamples.Of(recording, channel, timeline));
+        Channels = UsableSamples.ChannelsOf(recording)
+            .ToDictionary(channel => channel, channel => (channel == Channel.HeartRate ? heartRate ?? judged[channel] : judged[channel]).Usable);
         Histograms = Counted
             .Where(channel => this[channel] is not null)
             .ToDictionary(channel => channel, channel => ChannelHistogram.Of(Channels[channel]));
@@ -28,10 +37,19 @@ public sealed class UsableRecording
     /// <summary>Of heart rate, power and speed, where usable.</summary>
     public IReadOnlyDictionary<Channel, Histogram> Histograms { get; }
 
+    /// <summary>What of it does not count: whole rows and time without rows first, then by channel, reason and time.</summary>
+    public IReadOnlyList<Cut> Cuts => [.. judged.RowCuts, .. Channels.OrderBy(one => one.Key).SelectMany(one => one.Value.Cuts)];
+
+    /// <summary>Channels that were recorded, but of which too little is usable.</summary>
+    public IEnumerable<UsableChannel> TooLittle => Channels.Values.Where(channel => this[channel.Channel] is null);
+
     /// <summary>The channel, or null where it was not recorded or too little of it is usable.</summary>
     public UsableChannel? this[Channel channel] =>
         Channels.TryGetValue(channel, out var found) && found.Count > 0 && found.Share >= shareWanted ? found : null;
 
-    /// <summary>Channels that were recorded, but of which too little is usable.</summary>
-    public IEnumerable<UsableChannel> TooLittle => Channels.Values.Where(channel => this[channel.Channel] is null);
+    /// <summary>The same without heart rates above a limit, bpm; itself where there is none.</summary>
+    public UsableRecording WithHeartRateUpTo(double bpm) =>
+        Channels.TryGetValue(Channel.HeartRate, out var heartRate) && heartRate.Count > 0 && heartRate.Extremes().Largest > bpm
+            ? new UsableRecording(Recording, shareWanted, judged, judged[Channel.HeartRate].UpTo(bpm))
+            : this;
 }

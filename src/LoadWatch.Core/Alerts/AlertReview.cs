@@ -17,7 +17,7 @@ public static class AlertReview
     /// </summary>
     /// <param name="current">The person's alerts that are not normal, one for each key; normal ones are passed over.</param>
     /// <param name="lastSequence">The last sequence written for an alert id, 0 for none.</param>
-    /// <param name="findings">Findings of the evaluation date, as known now; those of other people or dates are passed over.</param>
+    /// <param name="findings">Findings of the evaluation date, as known now; those of other people or dates, and notes, are passed over.</param>
     /// <param name="heldOn">Whether, as known now, the finding holds on a date: tells a correction from a return.</param>
     public static AlertReviewResult Review(
         string person,
@@ -27,7 +27,7 @@ public static class AlertReview
         IReadOnlyList<Finding> findings,
         Func<FindingKey, LocalDate, bool> heldOn)
     {
-        var held = findings.Where(finding => finding.Person == person && finding.Date == evaluationDate).ToDictionary(finding => finding.Key);
+        var held = findings.Where(finding => finding.Person == person && finding.Date == evaluationDate && finding.Severity > Severity.Note).ToDictionary(finding => finding.Key);
         var standing = current.Where(alert => alert.Key.Person == person && alert.State != AlertState.Normal).ToList();
         var known = standing.Select(alert => alert.Key).ToHashSet();
         return Gather([

@@ -37,6 +37,9 @@ public sealed record Carried
     /// <summary>What rules keep, by a key of their own: as they made it, or, read back, as text that they read.</summary>
     public IReadOnlyDictionary<string, object> Runs { get; init; } = new Dictionary<string, object>();
 
+    /// <summary>The same of the rules of load by the reference values before a change that lies in the window (I-15); null where none does.</summary>
+    public IReadOnlyDictionary<string, object>? FormerRuns { get; init; }
+
     /// <summary>As JSON; numbers come back to the last bit.</summary>
     public static string Write(Carried carried) => JsonSerializer.Serialize(carried, Text);
 

@@ -7,6 +7,9 @@ namespace LoadWatch.Days;
 /// <summary>Lays one person's activities out as unbroken dates with their trends. Pure: the order of the activities does not matter (I-5).</summary>
 public static class LoadCalendar
 {
+    /// <summary>Raised when days or findings come out otherwise of the same sessions: then everybody's are computed anew, and nothing is decoded.</summary>
+    public const int Version = 2;
+
     /// <summary>No value and no rule looks further back than this; what would is carried (<see cref="Carried"/>). Days.</summary>
     public const int LookBackDays = 400;
 

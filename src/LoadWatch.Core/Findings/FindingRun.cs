@@ -41,5 +41,12 @@ internal sealed class FindingRun<TReading>(int onDays, RunState<TReading>? befor
 
 /// <param name="Reading">The last one; null where nothing stands.</param>
 /// <param name="MetInARow">Readable dates in a row with the condition, up to those that are wanted.</param>
-internal sealed record RunState<TReading>(LocalDate? Since, TReading? Reading, int MetInARow)
+internal sealed record RunState<TReading>(LocalDate? Since, TReading? Reading, int MetInARow) : IStanding
     where TReading : class;
+
+/// <summary>What rules keep of a run.</summary>
+internal interface IStanding
+{
+    /// <summary>Null where nothing stands.</summary>
+    LocalDate? Since { get; }
+}

@@ -81,5 +81,5 @@ public sealed class HardDaysRule : IRule
     private Finding Found(RuleSubject subject, LocalDate date, LocalDate since, double value, double limit, string unit, string text, Evidence evidence) =>
         new(subject.Person.Id, date, Name, Region: null, Severity.Notice, since, value, limit, unit, text, evidence);
 
-    private sealed record Standing(LocalDate? Since, RunState<HardRow>? Rows, HardRow? Row, RunState<MatchCount>? Matches);
+    private sealed record Standing(LocalDate? Since, RunState<HardRow>? Rows, HardRow? Row, RunState<MatchCount>? Matches) : IStanding;
 }

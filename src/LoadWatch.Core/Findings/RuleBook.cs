@@ -19,10 +19,19 @@ public static class RuleBook
         new FunctionTestRule(),
     ];
 
+    /// <summary>Those that read loads, which hang on reference values; what counted as heavy or fast on its date stays so.</summary>
+    public static IReadOnlyList<IRule> OfLoad { get; } =
+        [.. All.Where(rule => rule is LoadRatioRule or WeeklyJumpRule or SessionSpikeRule or MonotonyRule or HardDaysRule or FallingLoadRule)];
+
     /// <summary>The findings of every date by the rules that are on, sorted by date, name of the rule (ordinal), region and quantity.</summary>
-    public static IReadOnlyList<Finding> Evaluate(RuleSubject subject) =>
-        All.Where(rule => rule.IsEnabled(subject.Limits))
-            .SelectMany(rule => rule.Evaluate(subject))
+    public static IReadOnlyList<Finding> Evaluate(RuleSubject subject) => Evaluate(subject, All);
+
+    /// <summary>The same by some rules alone.</summary>
+    public static IReadOnlyList<Finding> Evaluate(RuleSubject subject, IReadOnlyList<IRule> rules) =>
+        InOrder(rules.Where(rule => rule.IsEnabled(subject.Limits)).SelectMany(rule => rule.Evaluate(subject)));
+
+    internal static IReadOnlyList<Finding> InOrder(IEnumerable<Finding> findings) =>
+        findings
             .OrderBy(finding => finding.Date)
             .ThenBy(finding => finding.Rule, StringComparer.Ordinal)
             .ThenBy(finding => finding.Region)

@@ -40,4 +40,7 @@ internal sealed class SpikeHold(int holdDays, SpikesStanding? before)
 /// <param name="KnownDaysSince">Known dates after the session's own.</param>
 internal sealed record StandingSpike(SessionSpike Spike, int KnownDaysSince);
 
-internal sealed record SpikesStanding(LocalDate Since, IReadOnlyList<StandingSpike> Spikes);
+internal sealed record SpikesStanding(LocalDate Since, IReadOnlyList<StandingSpike> Spikes) : IStanding
+{
+    LocalDate? IStanding.Since => Since;
+}

@@ -55,6 +55,17 @@ public sealed class LoadOrder
         return usable[wanted] is { } own ? new ChosenLoad(own.Value, own.Estimated, wanted, Line: null) : Converted(usable);
     }
 
+    /// <summary>The load of a session in a series by other reference values than those of its own date; null where it has none, and where it was converted without heart rate.</summary>
+    /// <param name="session">With its quantities by those values.</param>
+    /// <param name="linesOf">The date whose lines convert it.</param>
+    public double? Restate(SessionLoads session, LocalDate linesOf)
+    {
+        var usable = WithoutInvalid(session);
+        return usable[wanted]?.Value ?? (heartRateValid(session.Date)
+            ? fallbacks.Select(from => usable[from] is { } there ? Line(linesOf, from)?.Apply(there.Value) : null).FirstOrDefault(load => load is not null)
+            : null);
+    }
+
     private ChosenLoad? Converted(SessionLoads session)
     {
         var isValid = heartRateValid(session.Date);

@@ -17,6 +17,8 @@ public static class SpeedMaxShares
 
     public const double Highest = 1;
 
+    private const string NameEnd = "_percent_speed_max";
+
     /// <summary>Those that have a quantity of their own, in their order.</summary>
     public static IEnumerable<double> Distinct(IEnumerable<double> shares) =>
         shares.Where(share => share is >= Lowest and <= Highest).Select(Significant.Round).Distinct();
@@ -25,8 +27,12 @@ public static class SpeedMaxShares
     public static string Name(double share)
     {
         var percent = Significant.Round(share * 100).ToString("0.#######", CultureInfo.InvariantCulture);
-        return $"{DistanceAbove.Prefix}{percent.Replace('.', '_')}_percent_speed_max";
+        return $"{DistanceAbove.Prefix}{percent.Replace('.', '_')}{NameEnd}";
     }
+
+    /// <summary>True for what <see cref="Name"/> gives.</summary>
+    public static bool IsName(string quantity) =>
+        quantity.StartsWith(DistanceAbove.Prefix, StringComparison.Ordinal) && quantity.EndsWith(NameEnd, StringComparison.Ordinal);
 
     /// <summary>The distances and the share of the top speed.</summary>
     /// <param name="speed">Milliseconds by tenths of a metre per second.</param>

@@ -29,6 +29,9 @@ public sealed record Brief
     /// <summary>Alerts that returned since the contact's last brief.</summary>
     public required IReadOnlyList<BriefLine> Returned { get; init; }
 
+    /// <summary>Limits that only a changed reference value makes break: told, and no alert (I-15).</summary>
+    public IReadOnlyList<BriefLine> Changed { get; init; } = [];
+
     /// <summary>Files held or refused and other things that need an answer.</summary>
     public required IReadOnlyList<BriefLine> Questions { get; init; }
 

@@ -34,6 +34,7 @@ public static class BriefBuilder
             Flagged = [.. Named(flagged).Select(subject => Flag(subject, contact.Role, self))],
             FlaggedBeyond = Math.Max(0, flagged.Count - FlaggedAtMost),
             Returned = [.. shown.SelectMany(subject => Returned(subject, self))],
+            Changed = [.. shown.SelectMany(subject => Changed(subject, self))],
             Questions = [.. asked.Select(line => line with { Subject = OneLine.Of(line.Subject), Sentence = OneLine.Sentence(line.Sentence) })],
             Groups = Groups(contact, shown, upTo ?? date.PlusDays(-1), self),
         };
@@ -66,7 +67,7 @@ public static class BriefBuilder
     {
         var people = PeopleOf(contact, subjects);
         var view = RoleView.Of(contact.Role, people.Count);
-        return [.. people.Select(subject => subject with { Alerts = [.. subject.Alerts.Where(news => view.ShowsRule(news.Alert.Key.Rule))] })];
+        return [.. people.Select(subject => subject with { Alerts = [.. subject.Alerts.Where(news => view.ShowsRule(news.Alert.Key.Rule))], Notes = [.. subject.Notes.Where(note => view.ShowsRule(note.Rule))] })];
     }
 
     private static List<BriefSubject> PeopleOf(Contact contact, IReadOnlyList<BriefSubject> subjects) =>
@@ -110,6 +111,11 @@ public static class BriefBuilder
         .Select(news => RuleTexts.Returned(news, subject.Group.Limits, PlanOf(subject), self))
         .Distinct(StringComparer.Ordinal)
         .Select(sentence => new BriefLine(NameOf(subject.Person, self), OneLine.Sentence(sentence)));
+
+    private static IEnumerable<BriefLine> Changed(BriefSubject subject, bool self) => subject.Notes
+        .OrderBy(note => RuleTexts.Order(note.Rule))
+        .ThenBy(note => note.Quantity, StringComparer.Ordinal)
+        .Select(note => new BriefLine(NameOf(subject.Person, self), OneLine.Sentence(note.Text)));
 
     private static DayPlan PlanOf(BriefSubject subject) => subject.Days.Count == 0 ? DayPlan.None : subject.Days[^1].Plan;
 

@@ -1,5 +1,6 @@
 using LoadWatch.Alerts;
 using LoadWatch.Days;
+using LoadWatch.Findings;
 using LoadWatch.People;
 
 namespace LoadWatch.Notices;
@@ -14,7 +15,11 @@ public sealed record BriefSubject(
     Group Group,
     IReadOnlyList<Day> Days,
     IReadOnlyList<AlertNews> Alerts,
-    IReadOnlyList<string> Remarks);
+    IReadOnlyList<string> Remarks)
+{
+    /// <summary>Notes of the last date that are to be told.</summary>
+    public IReadOnlyList<Finding> Notes { get; init; } = [];
+}
 
 /// <summary>An alert as a contact meets it.</summary>
 /// <param name="IsNew">Raised, raised again or risen since the contact's last brief.</param>

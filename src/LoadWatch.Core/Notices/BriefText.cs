@@ -10,6 +10,7 @@ public static class BriefText
 {
     internal const string ToLookAt = "TO LOOK AT";
     internal const string BackToUsual = "BACK TO USUAL";
+    internal const string ReferenceValueChanged = "REFERENCE VALUE CHANGED";
     internal const string NeedsAnAnswer = "NEEDS AN ANSWER";
     internal const string Everybody = "EVERYBODY";
     internal const string HowToRead = "HOW TO READ THIS";
@@ -44,6 +45,7 @@ public static class BriefText
         lines.Paragraph("", brief.FirstLine);
         WriteFlagged(lines, brief);
         WriteSection(lines, BackToUsual, brief.Returned);
+        WriteSection(lines, ReferenceValueChanged, brief.Changed);
         WriteSection(lines, NeedsAnAnswer, brief.Questions);
         BriefTextTable.Write(lines, brief.Groups);
         WriteFoot(lines);
@@ -84,7 +86,12 @@ public static class BriefText
     public static string Beyond(int count) =>
         count == 1 ? "And 1 more to look at, marked in the table below." : $"And {count} more to look at, marked in the tables below.";
 
-    public static string SeverityWord(Severity severity) => severity == Severity.Warning ? "warning" : "notice";
+    public static string SeverityWord(Severity severity) => severity switch
+    {
+        Severity.Warning => "warning",
+        Severity.Notice => "notice",
+        _ => "note",
+    };
 
     private static string Mark(FlaggedReason reason) => (reason.IsNew, reason.IsSeen) switch
     {

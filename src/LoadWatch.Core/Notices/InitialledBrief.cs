@@ -28,6 +28,7 @@ internal sealed class InitialledBrief
         ContactName = cover.File(brief.ContactName) == brief.ContactName ? brief.ContactName : You,
         Flagged = [.. brief.Flagged.Select(Flagged)],
         Returned = [.. brief.Returned.Select(line => line with { Subject = Subject(line.Subject), Sentence = cover.Sentence(line.Sentence) })],
+        Changed = [.. brief.Changed.Select(line => line with { Subject = Subject(line.Subject), Sentence = cover.Sentence(line.Sentence) })],
         Questions = [.. brief.Questions.Select(Question)],
         Groups = [.. brief.Groups.Select(group => group with { Name = cover.Sentence(group.Name), Rows = [.. group.Rows.Select(Row)] })],
     };

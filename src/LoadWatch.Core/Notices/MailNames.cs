@@ -23,6 +23,7 @@ public static class MailNames
         Flagged = [],
         FlaggedBeyond = 0,
         Returned = [],
+        Changed = [],
         Questions = [],
         Groups = [],
     };

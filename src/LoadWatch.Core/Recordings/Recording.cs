@@ -36,6 +36,9 @@ public sealed record Recording
     /// </summary>
     public IReadOnlyDictionary<Channel, SampleSeries> Gathered { get; init; } = new Dictionary<Channel, SampleSeries>();
 
+    /// <summary>When the timer stood while the readings of <see cref="Gathered"/> were taken, by channel.</summary>
+    public IReadOnlyDictionary<Channel, IReadOnlyList<Pause>> GatheredPauses { get; init; } = new Dictionary<Channel, IReadOnlyList<Pause>>();
+
     /// <summary>Beats delivered in messages of their own (chest straps under water), in time order; not merged into the samples.</summary>
     public IReadOnlyList<TimedHeartRate> LateHeartRates { get; init; } = [];
 

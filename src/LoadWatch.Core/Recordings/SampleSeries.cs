@@ -1,3 +1,4 @@
+using LoadWatch.Quality;
 using NodaTime;
 
 namespace LoadWatch.Recordings;
@@ -17,7 +18,9 @@ public sealed class SampleSeries
     private readonly double[]?[] columns;
 
     /// <param name="unixMilliseconds">Time of each row, milliseconds since 1970-01-01T00:00:00Z, or <see cref="Undated"/>.</param>
-    /// <param name="columns">Values by channel, one per row; NaN marks a row without a reading. Channels never recorded are left out.</param>
+    /// <param name="columns">
+    /// Values by channel, one per row; NaN marks a row without a reading, or with one that was cut (<see cref="CutMark"/>). Channels never recorded are left out.
+    /// </param>
     /// <exception cref="ArgumentException">A column has another length than the times.</exception>
     public SampleSeries(long[] unixMilliseconds, IReadOnlyDictionary<Channel, double[]> columns)
     {
@@ -45,14 +48,14 @@ public sealed class SampleSeries
     /// <summary>Time of each row, milliseconds since 1970-01-01T00:00:00Z, or <see cref="Undated"/>.</summary>
     public ReadOnlySpan<long> UnixMilliseconds => times;
 
-    /// <summary>The channels that hold at least one reading.</summary>
+    /// <summary>The channels that hold at least one reading, cut or not.</summary>
     public IEnumerable<Channel> Channels => Every.Where(Has);
 
     /// <summary>The column of a channel, one value per row, NaN where a row has no reading; empty if the channel was never recorded.</summary>
     public ReadOnlySpan<double> this[Channel channel] => columns[(int)channel];
 
-    /// <summary>Whether the channel holds at least one reading.</summary>
-    public bool Has(Channel channel) => columns[(int)channel] is { } values && Array.Exists(values, value => !double.IsNaN(value));
+    /// <summary>Whether the channel holds at least one reading, cut or not.</summary>
+    public bool Has(Channel channel) => columns[(int)channel] is { } values && Array.Exists(values, CutMark.IsTaken);
 
     /// <summary>Earliest dated row, or null.</summary>
     public Instant? First
@@ -97,7 +100,7 @@ public sealed class SampleSeries
         var taken = Channels.ToDictionary(channel => channel, channel => Of(columns[(int)channel]!, rows));
         return new SampleSeries(
             Of(times, rows),
-            taken.Where(column => Array.Exists(column.Value, value => !double.IsNaN(value))).ToDictionary(column => column.Key, column => column.Value));
+            taken.Where(column => Array.Exists(column.Value, CutMark.IsTaken)).ToDictionary(column => column.Key, column => column.Value));
     }
 
     /// <summary>The same rows without some of the channels.</summary>

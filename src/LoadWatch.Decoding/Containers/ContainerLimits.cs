@@ -12,11 +12,18 @@ public sealed record ContainerLimits
     /// <summary>Entries of a zip file, folders among them. Default 10,000.</summary>
     public int Entries { get; init; } = 10_000;
 
-    /// <summary>Unpacked over packed size of one member. Default 200.</summary>
+    /// <summary>Unpacked over packed size: of a member of a zip file, of a gzip file as a whole. Default 200.</summary>
     public int Ratio { get; init; } = 200;
 
-    /// <summary>Members that unpack to no more than this many bytes may have any ratio. Default 1 MB.</summary>
+    /// <summary>What unpacks to no more than this many bytes may have any ratio. Default 1 MB.</summary>
     public int RatioFreeBytes { get; init; } = 1 << 20;
+
+    /// <summary>The limits where the largest file taken is another than 32 MB: a member may be as large as a file, and so may a container of one.</summary>
+    public static ContainerLimits For(long largestFileBytes)
+    {
+        var usual = new ContainerLimits();
+        return usual with { MemberBytes = checked((int)largestFileBytes), TotalBytes = Math.Max(usual.TotalBytes, largestFileBytes) };
+    }
 
     internal bool IsBomb(long unpacked, long packed) => unpacked > RatioFreeBytes && unpacked > packed * Ratio;
 }

@@ -9,9 +9,9 @@ namespace LoadWatch.Decoding.Containers;
 public sealed record ContainerMember(string Name, ReadOnlyMemory<byte> Bytes, Problem? Problem = null);
 
 /// <summary>What a container holds.</summary>
-/// <param name="Members">Unpacked one at a time while they are enumerated; a second enumeration unpacks again.</param>
+/// <param name="Members">Each is unpacked when it is asked for, and again when it is asked for again.</param>
 /// <param name="Problems">Why the container as a whole is refused; then there are no members.</param>
-public sealed record Unpacked(IEnumerable<ContainerMember> Members, IReadOnlyList<Problem> Problems)
+public sealed record Unpacked(IReadOnlyList<ContainerMember> Members, IReadOnlyList<Problem> Problems)
 {
     internal static Unpacked Refused(string reason, long byteOffset) =>
         new([], [new Problem(ProblemSeverity.Error, reason, ByteOffset: byteOffset)]);

@@ -5,17 +5,26 @@ namespace LoadWatch.Decoding.Containers;
 /// </summary>
 internal static class Crc32
 {
+    /// <summary>The state before the first byte.</summary>
+    public const uint Begin = uint.MaxValue;
+
     private static readonly uint[] Table = [.. Enumerable.Range(0, 256).Select(Entry)];
 
-    public static uint Of(ReadOnlySpan<byte> bytes)
+    public static uint Of(ReadOnlySpan<byte> bytes) => End(Continue(Begin, bytes));
+
+    /// <summary>The CRC of all bytes that led to a state.</summary>
+    public static uint End(uint state) => ~state;
+
+    /// <summary>The state behind more bytes.</summary>
+    public static uint Continue(uint state, ReadOnlySpan<byte> bytes)
     {
-        var crc = uint.MaxValue;
+        var crc = state;
         foreach (var value in bytes)
         {
             crc = Table[(crc ^ value) & 0xFF] ^ (crc >> 8);
         }
 
-        return ~crc;
+        return crc;
     }
 
     private static uint Entry(int index)

@@ -18,49 +18,71 @@ internal static class Gzip
     /// <summary>The members, joined, as one member of the given name.</summary>
     public static Unpacked Unpack(ReadOnlyMemory<byte> bytes, string name, ContainerLimits limits)
     {
-        var output = new GrowingBytes(FirstCapacity(bytes.Span, limits));
+        var output = InflatedBytes.Kept(FirstCapacity(bytes.Span, limits));
+        var fault = ReadMembers(bytes, output, limits);
+        if (output.IsFull)
+        {
+            // The last trailer told too little: what all members hold is counted first, so that no buffer has to grow.
+            output = InflatedBytes.Counted();
+            fault = ReadMembers(bytes, output, limits);
+            if (fault is null)
+            {
+                output = InflatedBytes.Kept(output.Length + 1);
+                fault = ReadMembers(bytes, output, limits);
+            }
+        }
+
+        return fault is var (position, reason) ? Unpacked.Refused(reason, position) : new([new ContainerMember(name, output.ToMemory())], []);
+    }
+
+    /// <summary>Whether every member is whole and none beyond the limits; keeps nothing.</summary>
+    public static bool IsWhole(ReadOnlyMemory<byte> bytes, ContainerLimits limits) => ReadMembers(bytes, InflatedBytes.Counted(), limits) is null;
+
+    /// <returns>Null once all are read, or the output is full; else what is wrong and where.</returns>
+    private static (int Position, string Reason)? ReadMembers(ReadOnlyMemory<byte> bytes, InflatedBytes output, ContainerLimits limits)
+    {
         var position = 0;
         do
         {
-            var step = ReadMember(bytes, position, output, limits);
-            if (step.Reason is { } reason)
+            var (next, reason) = ReadMember(bytes, position, output, limits);
+            if (reason is not null)
             {
-                return Unpacked.Refused(reason, step.Position);
+                return (next, reason);
             }
 
-            position = step.Position;
+            position = next;
         }
-        while (position < bytes.Length);
-        return new([new ContainerMember(name, output.ToMemory())], []);
+        while (position < bytes.Length && !output.IsFull);
+        return null;
     }
 
     private static (int Position, string? Reason) ReadMember(
-        ReadOnlyMemory<byte> bytes, int start, GrowingBytes output, ContainerLimits limits)
+        ReadOnlyMemory<byte> bytes, int start, InflatedBytes output, ContainerLimits limits)
     {
         if (GzipHeader.End(bytes.Span, start, out var reason) is not { } dataStart)
         {
             return (start, reason);
         }
 
-        var before = output.Length;
+        output.BeginMember();
         var packed = new PackedBytes(bytes[dataStart..]);
-        if (Inflate(packed, output, limits) is { } fault)
+        if (Inflate(packed, dataStart, output, limits) is { } fault)
         {
             return (dataStart, fault);
         }
 
-        return FindEnd(bytes.Span, dataStart, packed, output.From(before)) is { } end
+        return output.IsFull ? (dataStart, null) : FindEnd(bytes.Span, dataStart, packed, output) is { } end
             ? (end, null)
             : (dataStart, "gzip data is cut or damaged, or other bytes follow it: no trailer fits what was unpacked");
     }
 
-    private static string? Inflate(PackedBytes packed, GrowingBytes output, ContainerLimits limits)
+    /// <summary>The ratio is that of the whole file up to here: many members that each stay within it would do so together.</summary>
+    private static string? Inflate(PackedBytes packed, int packedBefore, InflatedBytes output, ContainerLimits limits)
     {
         using var inflater = new DeflateStream(packed, CompressionMode.Decompress);
-        var before = output.Length;
         try
         {
-            while (inflater.Read(output.Free()) is > 0 and var count)
+            while (!output.IsFull && inflater.Read(output.Free()) is > 0 and var count)
             {
                 output.Advance(count);
                 if (output.Length > limits.MemberBytes)
@@ -68,7 +90,7 @@ internal static class Gzip
                     return $"unpacks to more than {limits.MemberBytes} bytes";
                 }
 
-                if (limits.IsBomb(output.Length - before, packed.Handed))
+                if (limits.IsBomb(output.Length, packedBefore + packed.Handed))
                 {
                     return $"unpacks to more than {limits.Ratio} times its size";
                 }
@@ -87,11 +109,11 @@ internal static class Gzip
     /// unpacked, with
     /// nothing or another member behind them.
     /// </summary>
-    private static int? FindEnd(ReadOnlySpan<byte> bytes, int dataStart, PackedBytes packed, ReadOnlySpan<byte> unpacked)
+    private static int? FindEnd(ReadOnlySpan<byte> bytes, int dataStart, PackedBytes packed, InflatedBytes unpacked)
     {
         Span<byte> trailer = stackalloc byte[TrailerLength];
-        BinaryPrimitives.WriteUInt32LittleEndian(trailer, Crc32.Of(unpacked));
-        BinaryPrimitives.WriteUInt32LittleEndian(trailer[4..], (uint)unpacked.Length);
+        BinaryPrimitives.WriteUInt32LittleEndian(trailer, unpacked.MemberCrc);
+        BinaryPrimitives.WriteUInt32LittleEndian(trailer[4..], (uint)unpacked.MemberLength);
         var last = Math.Min(dataStart + packed.Handed, bytes.Length - TrailerLength);
         for (var at = Math.Max(dataStart, dataStart + packed.LastRead - HeldBackAtMost); at <= last; at++)
         {

@@ -29,7 +29,7 @@ internal static class Zip
                 Unpacked.Refused("entries overlap: together they are longer than the file", file.Length),
             var (_, total) when total > limits.TotalBytes =>
                 Unpacked.Refused($"unpacks to {total} bytes, at most {limits.TotalBytes} are read", wanted[0].DirectoryAt),
-            _ => new(wanted.Select(entry => Read(file, entry, limits)), []),
+            _ => new(new MembersOnDemand(wanted.Count, index => Read(file, wanted[index], limits)), []),
         };
     }
 

@@ -1,5 +1,4 @@
 using System.Buffers.Binary;
-using System.Text;
 
 namespace LoadWatch.Decoding.Containers;
 
@@ -10,18 +9,17 @@ internal sealed record ZipEntry(
     string Name, ushort Flags, ushort Method, uint Crc, long PackedLength, long Length, long HeaderAt, bool IsLink, int DirectoryAt)
 {
     private const int FixedLength = 46;
-    private const int LabelCharacters = 255;
     private const int UnixLink = 0xA000;
     private const int UnixKind = 0xF000;
     private const int UnixHost = 3;
 
     public bool IsEncrypted => (Flags & 0x0041) != 0;
 
-    public bool IsFolder => Name.EndsWith('/') || Name.EndsWith('\\');
+    public bool IsFolder => Name.EndsWith('/');
 
     /// <summary>A leftover of a file manager, or hidden: not meant as a member.</summary>
     public bool IsHidden => Array.Exists(
-        Name.Split('/', '\\'), part => part == "__MACOSX" || (part.StartsWith('.') && part is not ("." or "..")));
+        Name.Split('/'), part => part == "__MACOSX" || (part.StartsWith('.') && part is not ("." or "..")));
 
     /// <summary>Null where no whole entry stands; <paramref name="next"/> is where the following one begins.</summary>
     public static ZipEntry? ReadAt(ReadOnlySpan<byte> file, int at, int end, out int next)
@@ -36,7 +34,7 @@ internal sealed record ZipEntry(
         var nameLength = U16(entry, 28);
         next = at + FixedLength + nameLength + U16(entry, 30) + U16(entry, 32);
         return next > end ? null : new ZipEntry(
-            Label(entry.Slice(FixedLength, nameLength)),
+            ZipName.Label(entry.Slice(FixedLength, nameLength), entry.Slice(FixedLength + nameLength, U16(entry, 30)), U16(entry, 8)),
             Flags: U16(entry, 8),
             Method: U16(entry, 10),
             Crc: U32(entry, 16),
@@ -48,13 +46,6 @@ internal sealed record ZipEntry(
     }
 
     private static bool Link(ReadOnlySpan<byte> entry) => entry[5] == UnixHost && ((U32(entry, 38) >> 16) & UnixKind) == UnixLink;
-
-    /// <summary>The name as text to show: control characters replaced, cut at 255.</summary>
-    private static string Label(ReadOnlySpan<byte> name)
-    {
-        var text = Encoding.UTF8.GetString(name);
-        return string.Concat(text.Take(LabelCharacters).Select(c => char.IsControl(c) ? '\uFFFD' : c));
-    }
 
     private static ushort U16(ReadOnlySpan<byte> bytes, int at) => BinaryPrimitives.ReadUInt16LittleEndian(bytes[at..]);
 

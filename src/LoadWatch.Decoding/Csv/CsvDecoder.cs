@@ -13,10 +13,35 @@ public static class CsvDecoder
     /// </summary>
     /// <param name="bytes">The whole file.</param>
     /// <param name="layouts">The layouts known.</param>
-    public static DecodedFile Decode(ReadOnlyMemory<byte> bytes, IReadOnlyList<CsvLayout> layouts)
+    public static DecodedFile Decode(ReadOnlyMemory<byte> bytes, IReadOnlyList<CsvLayout> layouts) => Decode(CsvSource.Of(bytes), layouts);
+
+    /// <summary>
+    /// Reads a CSV of any size in flat memory: each recording of a person is handed on as it ends, numbered in that order. The rows of a person must
+    /// stand in the order of time as far as sessions go, and speeds in another unit are not told. A table is read whole.
+    /// </summary>
+    /// <param name="open">Opens the file at its start; the stream can seek. It is opened several times and never held whole.</param>
+    /// <param name="layouts">The layouts known.</param>
+    /// <param name="take">Gets the recordings. They count only if the answer is not refused, which is known at the end.</param>
+    /// <exception cref="IOException">The file could not be read.</exception>
+    public static CsvReadThrough Read(Func<Stream> open, IReadOnlyList<CsvLayout> layouts, Action<Recording> take)
+    {
+        ArgumentNullException.ThrowIfNull(open);
+        ArgumentNullException.ThrowIfNull(take);
+        var source = new CsvSource(open);
+        if (LayoutChoice.Make(source, layouts) is not { Layout: { Kind: CsvKind.Samples } layout, Table: { } table })
+        {
+            var file = Decode(source, layouts);
+            return new CsvReadThrough(file, file.Table is null);
+        }
+
+        var reading = new SampleReading(table, layout, take);
+        return new CsvReadThrough(reading.Read(), reading.IsRefused);
+    }
+
+    private static DecodedFile Decode(CsvSource source, IReadOnlyList<CsvLayout> layouts)
     {
         ArgumentNullException.ThrowIfNull(layouts);
-        return LayoutChoice.Make(bytes, layouts) switch
+        return LayoutChoice.Make(source, layouts) switch
         {
             { Problem: { } problem } => new DecodedFile("csv", FileType: null, SourceName: null, [], [problem]),
             { Layout.Kind: CsvKind.Samples } samples => UnitOutliers.LeaveOut(new SampleReading(samples.Table!, samples.Layout!).Read()),
@@ -24,3 +49,8 @@ public static class CsvDecoder
         };
     }
 }
+
+/// <summary>What came of reading a CSV through.</summary>
+/// <param name="File">Without the recordings, which were handed on.</param>
+/// <param name="IsRefused">The file cannot be used, and what was handed on does not count.</param>
+public sealed record CsvReadThrough(DecodedFile File, bool IsRefused);

@@ -1,4 +1,3 @@
-using System.Runtime.InteropServices;
 using CsvHelper;
 using LoadWatch.Recordings;
 
@@ -14,6 +13,7 @@ internal sealed class CsvRows : IDisposable
     private const int LineLimitBytes = 1 << 20;
 
     private readonly CsvReader reader;
+    private readonly NulWatch source;
     private CsvMalformedReason? malformed;
 
     public CsvRows(CsvText text, char separator)
@@ -31,7 +31,8 @@ internal sealed class CsvRows : IDisposable
         };
 
         // Read as a stream: the limit of a line is not kept over an array.
-        reader = CsvReader.Create(AsStream(text.Bytes), options);
+        source = new NulWatch(text.Open());
+        reader = CsvReader.Create(source, options);
     }
 
     /// <summary>Why reading ended before the end of the text, or null.</summary>
@@ -56,7 +57,15 @@ internal sealed class CsvRows : IDisposable
     public bool IsQuotedWrongly => malformed == CsvMalformedReason.TextAfterClosingQuote;
 
     /// <summary>A cell without its quotes and the blanks around it; empty where the row is too short.</summary>
-    public ReadOnlySpan<byte> this[int index] => reader.GetSpan(index).Trim(" \t"u8);
+    public ReadOnlySpan<byte> this[int index]
+    {
+        get
+        {
+            // Most cells stand in the file as they are meant: the reader's own trimming costs more than all else it does.
+            var raw = reader.GetRawSpan(index);
+            return raw is [> (byte)' ', .., > (byte)' '] or [> (byte)' '] && !raw.Contains((byte)'"') ? raw : reader.GetSpan(index).Trim(" \t"u8);
+        }
+    }
 
     public string Text(int index) => reader.GetString(index).Trim();
 
@@ -81,7 +90,7 @@ internal sealed class CsvRows : IDisposable
         Fault = this switch
         {
             _ when reader.RawRecord.Length > LineLimitBytes => Problem("a line is longer than 1 MB", Line),
-            _ when reader.RawRecord.Contains((byte)0) => Problem("a NUL byte: the file is damaged or no text", Line),
+            _ when source.HasSeenNul && reader.RawRecord.Contains((byte)0) => Problem("a NUL byte: the file is damaged or no text", Line),
             _ when malformed == CsvMalformedReason.UnterminatedQuote => Problem("a quote opens here and is never closed", Line),
             _ => null,
         };
@@ -89,8 +98,4 @@ internal sealed class CsvRows : IDisposable
     }
 
     private static Problem Problem(string reason, long line) => new(ProblemSeverity.Error, reason, Line: line);
-
-    private static MemoryStream AsStream(ReadOnlyMemory<byte> bytes) => MemoryMarshal.TryGetArray(bytes, out var segment)
-        ? new MemoryStream(segment.Array!, segment.Offset, segment.Count, writable: false)
-        : new MemoryStream(bytes.ToArray(), writable: false);
 }

@@ -11,9 +11,12 @@ internal sealed record CsvTable(CsvText Text, char Separator, int RowsAbove, lon
 {
     private const int ShownCharacters = 200;
 
-    public static CsvTable Open(ReadOnlyMemory<byte> bytes, string encoding, char separator)
+    // A tracking export with every band of speed has some hundred.
+    private const int ColumnsAtMost = 5_000;
+
+    public static CsvTable Open(CsvSource source, string encoding, char separator)
     {
-        var text = CsvText.Of(bytes, encoding);
+        var text = CsvText.Of(source, encoding);
         using var rows = new CsvRows(text, separator);
         if (!rows.Next())
         {
@@ -22,9 +25,6 @@ internal sealed record CsvTable(CsvText Text, char Separator, int RowsAbove, lon
 
         return StatedSeparator(rows, separator) is { } stated ? OpenBelow(text, stated) : At(text, separator, rowsAbove: 1, rows);
     }
-
-    /// <summary>There are no more rows than this below the names.</summary>
-    public int RowsAtMost => Math.Max(0, Text.LinesAtMost() - RowsAbove);
 
     /// <summary>The rows below the names.</summary>
     public CsvRows Rows()
@@ -75,8 +75,9 @@ internal sealed record CsvTable(CsvText Text, char Separator, int RowsAbove, lon
             : new(text, separator, 1, null, [], rows.Fault ?? new Problem(ProblemSeverity.Error, "no line of column names", Line: 2));
     }
 
-    private static CsvTable At(CsvText text, char separator, int rowsAbove, CsvRows rows) =>
-        new(text, separator, rowsAbove, rows.Line, [.. Enumerable.Range(0, rows.CellCount).Select(rows.Text)], Fault: null);
+    private static CsvTable At(CsvText text, char separator, int rowsAbove, CsvRows rows) => rows.CellCount > ColumnsAtMost
+        ? new(text, separator, rowsAbove, rows.Line, [], new Problem(ProblemSeverity.Error, $"more than {ColumnsAtMost} columns", Line: rows.Line))
+        : new(text, separator, rowsAbove, rows.Line, [.. Enumerable.Range(0, rows.CellCount).Select(rows.Text)], Fault: null);
 
     /// <summary>Of a first line <c>sep=;</c>, whether or not the reader has cut it in two.</summary>
     private static char? StatedSeparator(CsvRows rows, char separator)

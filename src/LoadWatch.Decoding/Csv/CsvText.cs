@@ -1,10 +1,10 @@
 using System.Text;
-using System.Text.Unicode;
 
 namespace LoadWatch.Decoding.Csv;
 
-/// <summary>The bytes of a text without their byte order mark, and their encoding; null stands for UTF-8.</summary>
-internal sealed record CsvText(ReadOnlyMemory<byte> Bytes, Encoding? Encoding)
+/// <summary>A text and its encoding; null stands for UTF-8.</summary>
+/// <param name="MarkLength">Bytes of its byte order mark.</param>
+internal sealed record CsvText(CsvSource Source, int MarkLength, Encoding? Encoding)
 {
     public const string Auto = "auto";
     public const string Utf8Name = "utf-8";
@@ -15,28 +15,23 @@ internal sealed record CsvText(ReadOnlyMemory<byte> Bytes, Encoding? Encoding)
     public static bool Knows(string name) => name is Auto or Utf8Name or Utf16 or Windows1252;
 
     /// <summary>A byte order mark decides; then the name; then, for <c>auto</c>, whether the bytes are valid UTF-8.</summary>
-    public static CsvText Of(ReadOnlyMemory<byte> bytes, string name) => bytes.Span switch
+    public static CsvText Of(CsvSource source, string name) => source.Head switch
     {
-        [0xEF, 0xBB, 0xBF, ..] => new(bytes[3..], Encoding: null),
-        [0xFF, 0xFE, ..] => new(bytes[2..], Utf16Reader(bigEndian: false)),
-        [0xFE, 0xFF, ..] => new(bytes[2..], Utf16Reader(bigEndian: true)),
-        _ => new(bytes, ByName(bytes.Span, name)),
+        [0xEF, 0xBB, 0xBF, ..] => new(source, 3, Encoding: null),
+        [0xFF, 0xFE, ..] => new(source, 2, Utf16Reader(bigEndian: false)),
+        [0xFE, 0xFF, ..] => new(source, 2, Utf16Reader(bigEndian: true)),
+        _ => new(source, 0, ByName(source, name)),
     };
 
-    /// <summary>At most this many lines: line ends of all three kinds, and one more where the text does not end with one.</summary>
-    public int LinesAtMost()
-    {
-        var span = Bytes.Span;
-        var open = span is [.., (byte)'\n' or (byte)'\r'] ? 0 : 1;
-        return span.Count((byte)'\n') + span.Count((byte)'\r') - span.Count("\r\n"u8) + open;
-    }
+    /// <summary>The text without its byte order mark.</summary>
+    public Stream Open() => Source.Open(MarkLength);
 
-    private static Encoding? ByName(ReadOnlySpan<byte> bytes, string name) => name switch
+    private static Encoding? ByName(CsvSource source, string name) => name switch
     {
         Utf8Name => null,
         Utf16 => Utf16Reader(bigEndian: false),
         Windows1252 => Western(),
-        _ => Utf8.IsValid(bytes) ? null : Western(),
+        _ => source.IsUtf8 ? null : Western(),
     };
 
     private static UnicodeEncoding Utf16Reader(bool bigEndian) => new(bigEndian, byteOrderMark: false);

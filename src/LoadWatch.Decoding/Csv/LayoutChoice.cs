@@ -6,14 +6,14 @@ namespace LoadWatch.Decoding.Csv;
 /// <summary>The layout that a file's column names pick, or why none could be picked.</summary>
 internal sealed record LayoutChoice(CsvLayout? Layout, CsvTable? Table, Problem? Problem)
 {
-    public static LayoutChoice Make(ReadOnlyMemory<byte> bytes, IReadOnlyList<CsvLayout> layouts)
+    public static LayoutChoice Make(CsvSource source, IReadOnlyList<CsvLayout> layouts)
     {
         if (layouts.Select(Unusable).FirstOrDefault(reason => reason is not null) is { } unusable)
         {
             return Refused(Error(unusable, line: null));
         }
 
-        var tables = Tables(bytes, layouts);
+        var tables = Tables(source, layouts);
         var fitting = layouts.Where(layout => Fits(layout, tables[Dialect(layout)])).ToList();
         var longest = fitting.Count == 0 ? 0 : fitting.Max(layout => layout.Header.Count);
         var best = fitting.FindAll(layout => layout.Header.Count == longest);
@@ -28,9 +28,9 @@ internal sealed record LayoutChoice(CsvLayout? Layout, CsvTable? Table, Problem?
     private static string? Unusable(CsvLayout layout) =>
         layout.Validate() is [var reason, ..] ? $"layout '{layout.Name}' cannot be used: {reason}" : null;
 
-    private static Dictionary<(string, char), CsvTable> Tables(ReadOnlyMemory<byte> bytes, IReadOnlyList<CsvLayout> layouts) =>
+    private static Dictionary<(string, char), CsvTable> Tables(CsvSource source, IReadOnlyList<CsvLayout> layouts) =>
         layouts.Select(Dialect).Distinct().ToDictionary(
-            dialect => dialect, dialect => CsvTable.Open(bytes, dialect.Encoding, dialect.Delimiter));
+            dialect => dialect, dialect => CsvTable.Open(source, dialect.Encoding, dialect.Delimiter));
 
     private static (string Encoding, char Delimiter) Dialect(CsvLayout layout) => (layout.Encoding, layout.Delimiter);
 

@@ -1,8 +1,9 @@
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Csv;
 
-/// <summary>Takes out the readings of a row that was received too badly.</summary>
+/// <summary>Marks the readings of a row that was received too badly.</summary>
 internal sealed class QualityCell(CsvTable table, CsvQuality wanted, char decimalMark)
 {
     private readonly int column = table.Find(wanted.Column)!.Value;
@@ -41,7 +42,8 @@ internal sealed class QualityCell(CsvTable table, CsvQuality wanted, char decima
     public Problem? Take(CsvRows rows, double[] readings)
     {
         var value = double.NaN;
-        if (!rows[column].IsEmpty && !StrictNumber.TryRead(rows[column], decimalMark, out value))
+        var cell = rows[column];
+        if (!cell.IsEmpty && !StrictNumber.TryRead(cell, decimalMark, out value))
         {
             return table.Wrong(rows, column, $"not a number with the decimal mark {decimalMark}");
         }
@@ -50,7 +52,7 @@ internal sealed class QualityCell(CsvTable table, CsvQuality wanted, char decima
         {
             foreach (var channel in wanted.Channels)
             {
-                readings[(int)channel] = double.NaN;
+                readings[(int)channel] = double.IsNaN(readings[(int)channel]) ? double.NaN : CutMark.Of(CutReason.MarkedBad);
             }
         }
 

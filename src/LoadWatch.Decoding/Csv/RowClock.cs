@@ -15,6 +15,7 @@ internal sealed class RowClock
     private readonly int? startColumn;
     private readonly DayClock? days;
     private readonly LineCount backwards = new();
+    private readonly LineCount repeated = new();
     private Instant? startOfFile;
 
     public RowClock(CsvTable table, CsvLayout layout)
@@ -42,11 +43,15 @@ internal sealed class RowClock
     };
 
     /// <summary>Takes the time of a row that counts as the one that the next of the same person is compared with.</summary>
-    public void Accept(Instant time, ClockTrack track, long line)
+    public void Accept(Instant time, ClockTrack track, CsvRows rows)
     {
         if (time < track.Previous)
         {
-            backwards.Add(line);
+            backwards.Add(rows.Line);
+        }
+        else if (time == track.Previous)
+        {
+            repeated.Add(rows.Line);
         }
 
         track.Previous = time;
@@ -60,6 +65,7 @@ internal sealed class RowClock
             (zone.Skipped, "the local time does not exist in the zone, the clocks went forward: taken as later by the gap"),
             (zone.Ambiguous, "the local time came twice, the clocks went back: taken as the earlier unless rows would run backwards"),
             (backwards, "the time is before that of the row above"),
+            (repeated, "the time is that of the row above"),
         ];
         return all.Where(entry => entry.Lines.Count > 0).Select(entry => Warning(entry.Lines, entry.Reason));
     }
@@ -67,7 +73,7 @@ internal sealed class RowClock
     private Instant? OfDay(CsvRows rows, DayClock known, ClockTrack track, out Problem? problem)
     {
         var above = track.Previous?.InZone(zone.Zone).LocalDateTime;
-        return known.Read(rows, above, out problem) is { } local ? zone.Place(local, track.Previous, rows.Line) : null;
+        return known.Read(rows, above, out problem) is { } local ? zone.Place(local, track.Previous, rows) : null;
     }
 
     private Instant? FromStart(CsvRows rows, int column, ClockTrack track, out Problem? problem)
@@ -116,7 +122,7 @@ internal sealed class RowClock
         }
 
         track.Offset ??= written.Offset;
-        return written.Instant ?? zone.Place(written.Local, before, rows.Line);
+        return written.Instant ?? zone.Place(written.Local, before, rows);
     }
 
     private Problem Warning(LineCount lines, string reason) =>

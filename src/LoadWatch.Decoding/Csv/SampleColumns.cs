@@ -1,56 +1,65 @@
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Csv;
 
-/// <summary>
-/// Fills the columns of a series. They are made once, for as many rows as there can be, so memory is what the readings need; a channel
-/// without a reading takes none.
-/// </summary>
-internal sealed class SampleColumns(int rowsAtMost)
+/// <summary>Gathers the rows of a series; a stretch of a channel without a reading takes no memory.</summary>
+internal sealed class SampleColumns
 {
-    private readonly long[] times = new long[rowsAtMost];
-    private readonly double[]?[] values = new double[]?[Enum.GetValues<Channel>().Length];
+    private readonly BlockColumn<long> times = new(SampleSeries.Undated);
+    private readonly BlockColumn<double>[] values = [.. Enum.GetValues<Channel>().Select(_ => new BlockColumn<double>(double.NaN))];
 
     public int Count { get; private set; }
+
+    /// <summary>The latest time, milliseconds since 1970; null without a row.</summary>
+    public long? Latest { get; private set; }
 
     /// <param name="unixMilliseconds">Time of the row.</param>
     /// <param name="readings">By channel number; NaN for none.</param>
     public void Add(long unixMilliseconds, ReadOnlySpan<double> readings)
     {
-        times[Count] = unixMilliseconds;
+        times.Set(Count, unixMilliseconds);
+        Latest = Latest > unixMilliseconds ? Latest : unixMilliseconds;
         for (var channel = 0; channel < values.Length; channel++)
         {
-            if (!double.IsNaN(readings[channel]))
+            if (CutMark.IsTaken(readings[channel]))
             {
-                (values[channel] ??= Empty())[Count] = readings[channel];
+                values[channel].Set(Count, readings[channel]);
             }
         }
 
         Count++;
     }
 
-    /// <summary>Hands the columns over; nothing can be added after it.</summary>
-    public SampleSeries ToSeries()
+    /// <summary>
+    /// Hands the rows over as one series, or as one for each session; nothing can be added after it. One column after the other leaves its blocks,
+    /// so that no more than one is there twice.
+    /// </summary>
+    /// <param name="sessionsOf">The rows of each session, from the times of all; null, or null from it, for one series of all.</param>
+    public IReadOnlyList<SampleSeries> ToSeries(Func<long[], IReadOnlyList<int[]>?>? sessionsOf)
     {
-        var columns = new Dictionary<Channel, double[]>();
-        foreach (var channel in Enum.GetValues<Channel>())
+        var all = times.Take(Count);
+        var sessions = sessionsOf?.Invoke(all);
+        var columns = Enumerable.Range(0, sessions?.Count ?? 1).Select(_ => new Dictionary<Channel, double[]>()).ToList();
+        foreach (var channel in Enum.GetValues<Channel>().Where(channel => !values[(int)channel].IsEmpty))
         {
-            if (values[(int)channel] is { } column)
+            var column = values[(int)channel].Take(Count);
+            for (var session = 0; session < columns.Count; session++)
             {
-                columns[channel] = Cut(column);
-                values[(int)channel] = null;
+                Add(columns[session], channel, sessions is null ? column : Of(column, sessions[session]));
             }
         }
 
-        return new SampleSeries(Cut(times), columns);
+        return [.. columns.Select((those, session) => new SampleSeries(sessions is null ? all : Of(all, sessions[session]), those))];
     }
 
-    private double[] Empty()
+    private static void Add(Dictionary<Channel, double[]> columns, Channel channel, double[] column)
     {
-        var column = new double[times.Length];
-        Array.Fill(column, double.NaN);
-        return column;
+        if (Array.Exists(column, value => !double.IsNaN(value)))
+        {
+            columns[channel] = column;
+        }
     }
 
-    private T[] Cut<T>(T[] column) => column.Length == Count ? column : column[..Count];
+    private static T[] Of<T>(T[] column, int[] rows) => Array.ConvertAll(rows, row => column[row]);
 }

@@ -1,3 +1,4 @@
+using System.Text;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Csv;
@@ -11,6 +12,9 @@ internal sealed class SampleReading
     // A squad for a season; without a limit a file of rows an hour apart would give a recording a row.
     private const int RecordingsAtMost = 2_000;
 
+    // Several seasons, where none is kept.
+    private const int HandedOnAtMost = 100_000;
+
     private readonly CsvTable table;
     private readonly CsvLayout layout;
     private readonly RowClock clock;
@@ -18,17 +22,31 @@ internal sealed class SampleReading
     private readonly RowProblems problems = new();
     private readonly ReadingCells readings;
     private readonly SportCell sport;
-    private int goodRows;
+    private readonly byte[] timeName;
+    private readonly Action<Recording>? take;
+    private long goodRows;
+    private long openRows;
+    private int recordings;
 
-    public SampleReading(CsvTable table, CsvLayout layout)
+    /// <param name="table">The file.</param>
+    /// <param name="layout">Of samples.</param>
+    /// <param name="take">Gets each recording of a person as it ends, so that no more than the sessions under way are held. Null: all are kept to the end.</param>
+    public SampleReading(CsvTable table, CsvLayout layout, Action<Recording>? take = null)
     {
+        this.take = take;
         this.table = table;
         this.layout = layout;
         clock = new RowClock(table, layout);
         subjects = new SampleSubjects(table, layout);
         readings = new ReadingCells(table, layout);
         sport = new SportCell(table, layout);
+        timeName = Encoding.UTF8.GetBytes(layout.Time.Column);
     }
+
+    /// <summary>The file cannot be used, whatever was handed on before that was seen.</summary>
+    public bool IsRefused { get; private set; }
+
+    private int Most => take is null ? RecordingsAtMost : HandedOnAtMost;
 
     public DecodedFile Read()
     {
@@ -37,10 +55,15 @@ internal sealed class SampleReading
             return Refused(refusal);
         }
 
-        var recordings = ToRecordings();
-        return recordings.Count <= RecordingsAtMost
-            ? new("csv", FileType: null, layout.Name, recordings, [.. problems.Close(), .. clock.Warnings()])
-            : Refused(new Problem(ProblemSeverity.Error, $"more than {RecordingsAtMost} recordings: too many rows lie more than 60 min apart"));
+        var kept = new List<Recording>();
+        foreach (var subject in subjects.InOrder.Where(one => one.Samples.Count > 0))
+        {
+            HandOn(subject, take ?? kept.Add);
+        }
+
+        return recordings <= Most
+            ? new("csv", FileType: null, layout.Name, kept, [.. problems.Close(), .. clock.Warnings()])
+            : Refused(TooManyRecordings());
     }
 
     /// <summary>Null once all rows are read, else why the file cannot be used.</summary>
@@ -54,9 +77,14 @@ internal sealed class SampleReading
                 continue;
             }
 
-            if (goodRows == RowsAtMost)
+            if (openRows == RowsAtMost)
             {
-                return Refusal($"more than {RowsAtMost} rows", rows.Line);
+                return Refusal($"more than {RowsAtMost} rows{(take is null ? "" : " of sessions that have not ended")}", rows.Line);
+            }
+
+            if (recordings > Most)
+            {
+                return TooManyRecordings();
             }
 
             if (ReadRow(rows) is { } problem && PutAside(rows, problem) is { } refusal)
@@ -107,7 +135,7 @@ internal sealed class SampleReading
 
         if (subjects.Of(rows, out var problem) is not { } subject
             || clock.Read(rows, subject.Clock, out problem) is not { } time
-            || (problem = readings.Take(rows)) is not null)
+            || (problem = readings.Take(rows) ?? EndSession(rows, subject, time.ToUnixTimeMilliseconds())) is not null)
         {
             return problem;
         }
@@ -117,9 +145,31 @@ internal sealed class SampleReading
             problems.Add(doubt);
         }
 
-        clock.Accept(time, subject.Clock, rows.Line);
+        clock.Accept(time, subject.Clock, rows);
         subject.Samples.Add(time.ToUnixTimeMilliseconds(), readings.Values);
         goodRows++;
+        openRows++;
+        return null;
+    }
+
+    /// <summary>Hands a session on before the first row of the next; not null for a row that comes too late for one that is gone.</summary>
+    private Problem? EndSession(CsvRows rows, SampleSubject subject, long time)
+    {
+        if (take is null || subject.Name is null)
+        {
+            return null;
+        }
+
+        if (time - subject.EndedAt <= SessionGaps.LongestMilliseconds)
+        {
+            return Refusal("of a session whose rows had come to an end above: a file so large is read in the order of time", rows.Line);
+        }
+
+        if (time - subject.Samples.Latest > SessionGaps.LongestMilliseconds)
+        {
+            HandOn(subject, take);
+        }
+
         return null;
     }
 
@@ -144,17 +194,26 @@ internal sealed class SampleReading
     /// <summary>
     /// For a row of column names in the middle: a warning where they are those of the first line, an error where they are others.
     /// </summary>
-    private Problem? NamesAgain(CsvRows rows)
+    private Problem? NamesAgain(CsvRows rows) => rows switch
     {
-        var cells = Enumerable.Range(0, rows.CellCount).Select(rows.Text).ToList();
-        return cells switch
+        _ when !HoldsTimeName(rows) => null,
+        _ when Enumerable.Range(0, rows.CellCount).Select(rows.Text).SequenceEqual(table.Names) =>
+            Refusal("the column names come again: rows above and below are taken as one session", rows.Line)
+                with { Severity = ProblemSeverity.Warning },
+        _ => Refusal("other column names begin here: two files in one", rows.Line),
+    };
+
+    private bool HoldsTimeName(CsvRows rows)
+    {
+        for (var index = 0; index < rows.CellCount; index++)
         {
-            _ when !cells.Contains(layout.Time.Column) => null,
-            _ when cells.SequenceEqual(table.Names) =>
-                Refusal("the column names come again: rows above and below are taken as one session", rows.Line)
-                    with { Severity = ProblemSeverity.Warning },
-            _ => Refusal("other column names begin here: two files in one", rows.Line),
-        };
+            if (rows[index].SequenceEqual(timeName))
+            {
+                return true;
+            }
+        }
+
+        return false;
     }
 
     private Problem? TooManyBad()
@@ -170,19 +229,13 @@ internal sealed class SampleReading
         };
     }
 
-    private List<Recording> ToRecordings()
+    private void HandOn(SampleSubject subject, Action<Recording> taker)
     {
-        List<Recording> recordings = [];
-        foreach (var subject in subjects.InOrder.Where(one => one.Samples.Count > 0))
+        openRows -= subject.Samples.Count;
+        foreach (var series in subject.End(subject.Name is null ? null : times => SessionGaps.Sessions(times, Most)))
         {
-            var all = subject.Samples.ToSeries();
-            foreach (var series in subject.Name is null ? [all] : SessionGaps.Split(all))
-            {
-                recordings.Add(ToRecording(recordings.Count + 1, subject, series));
-            }
+            taker(ToRecording(++recordings, subject, series));
         }
-
-        return recordings;
     }
 
     private Recording ToRecording(int part, SampleSubject subject, SampleSeries series)
@@ -200,7 +253,14 @@ internal sealed class SampleReading
         };
     }
 
-    private DecodedFile Refused(Problem refusal) => new("csv", FileType: null, layout.Name, [], [refusal, .. problems.Close()]);
+    private DecodedFile Refused(Problem refusal)
+    {
+        IsRefused = true;
+        return new("csv", FileType: null, layout.Name, [], [refusal, .. problems.Close()]);
+    }
+
+    private Problem TooManyRecordings() =>
+        new(ProblemSeverity.Error, $"more than {Most} recordings: too many rows lie more than 60 min apart");
 
     private Problem WrongCount(CsvRows rows) => Refusal($"{rows.CellCount} cells for {table.Names.Count} columns", rows.Line);
 

@@ -11,78 +11,106 @@ internal sealed class SampleSubjects(CsvTable table, CsvLayout layout)
 
     private readonly int? column = table.Find(layout.PersonColumn);
     private readonly CellTexts names = new(table.Find(layout.PersonColumn) ?? 0);
-    private readonly Dictionary<string, int> rowsOf = RowCounts(table, layout.PersonColumn);
     private readonly Dictionary<string, SampleSubject> known = new(StringComparer.Ordinal);
     private readonly List<SampleSubject> inOrder = [];
+    private SampleSubject? last;
 
     public IReadOnlyList<SampleSubject> InOrder => inOrder;
 
     /// <returns>Null with the problem, for a row that belongs to nobody.</returns>
     public SampleSubject? Of(CsvRows rows, out Problem? problem)
     {
-        var name = column is null ? "" : names.Of(rows);
-        if (known.TryGetValue(name, out var found))
+        problem = null;
+        if (column is not { } index)
         {
-            problem = null;
-            return found;
+            return last ??= Add("", []);
         }
 
-        problem = Complaint(rows, name);
-        return problem is null ? Add(name) : null;
+        return Expected(rows[index]) ?? Named(rows, index, out problem);
     }
 
-    private Problem? Complaint(CsvRows rows, string name) => column is not { } index ? null : name.Length switch
+    /// <summary>Rows stand person by person, or moment by moment with the people always in one order: mostly the row is the last one's, or who came after.</summary>
+    private SampleSubject? Expected(ReadOnlySpan<byte> cell)
+    {
+        if (last is null || cell.IsEmpty)
+        {
+            return null;
+        }
+
+        if (last.Next is { } next && cell.SequenceEqual(next.Cell))
+        {
+            return last = next;
+        }
+
+        return cell.SequenceEqual(last.Cell) ? last : null;
+    }
+
+    private SampleSubject? Named(CsvRows rows, int index, out Problem? problem)
+    {
+        problem = null;
+        var name = names.Of(rows);
+        if (!known.TryGetValue(name, out var found))
+        {
+            problem = Complaint(rows, index, name);
+            found = problem is null ? Add(name, rows[index].ToArray()) : null;
+        }
+
+        if (found is not null)
+        {
+            if (last is not null)
+            {
+                last.Next = found;
+            }
+
+            last = found;
+        }
+
+        return found;
+    }
+
+    private Problem? Complaint(CsvRows rows, int index, string name) => name.Length switch
     {
         0 => table.Wrong(rows, index, "no person or device"),
         > LongestCharacters => table.Wrong(rows, index, $"more than {LongestCharacters} characters name no person or device"),
-        _ when !rowsOf.ContainsKey(name) => table.Wrong(rows, index, $"more than {SubjectsAtMost} people in one file"),
+        _ when known.Count == SubjectsAtMost => table.Wrong(rows, index, $"more than {SubjectsAtMost} people in one file"),
         _ => null,
     };
 
-    private SampleSubject Add(string name)
+    private SampleSubject Add(string name, byte[] cell)
     {
-        var rows = Math.Min(SampleReading.RowsAtMost, column is null ? table.RowsAtMost : rowsOf[name]);
-        var added = new SampleSubject(column is null ? null : name, rows);
+        var added = new SampleSubject(column is null ? null : name, cell);
         known.Add(name, added);
         inOrder.Add(added);
         return added;
-    }
-
-    /// <summary>
-    /// Rows by person, of as many as are taken. A look through the file of its own: columns that grow would be copied, and for a moment
-    /// there twice.
-    /// </summary>
-    private static Dictionary<string, int> RowCounts(CsvTable table, string? personColumn)
-    {
-        var counts = new Dictionary<string, int>(StringComparer.Ordinal);
-        if (table.Find(personColumn) is not { } column)
-        {
-            return counts;
-        }
-
-        var texts = new CellTexts(column);
-        using var rows = table.Rows();
-        while (rows.Next())
-        {
-            var name = column < rows.CellCount ? texts.Of(rows) : "";
-            if (counts.TryGetValue(name, out var count) || counts.Count < SubjectsAtMost)
-            {
-                counts[name] = count + 1;
-            }
-        }
-
-        return counts;
     }
 }
 
 /// <summary>The rows of one person or device.</summary>
 /// <param name="name">As the file writes it; null where it tells none apart.</param>
-/// <param name="rowsAtMost">As many rows as there can be of it.</param>
-internal sealed class SampleSubject(string? name, int rowsAtMost)
+/// <param name="cell">The bytes that named it first.</param>
+internal sealed class SampleSubject(string? name, byte[] cell)
 {
     public string? Name => name;
 
+    public ReadOnlySpan<byte> Cell => cell;
+
+    /// <summary>Who came after it when it was last followed by another.</summary>
+    public SampleSubject? Next { get; set; }
+
     public ClockTrack Clock { get; } = new();
 
-    public SampleColumns Samples { get; } = new(rowsAtMost);
+    /// <summary>The rows of the session under way, or of all that are not handed on yet.</summary>
+    public SampleColumns Samples { get; private set; } = new();
+
+    /// <summary>The latest row handed on, milliseconds since 1970; null before the first.</summary>
+    public long? EndedAt { get; private set; }
+
+    /// <inheritdoc cref="SampleColumns.ToSeries"/>
+    public IReadOnlyList<SampleSeries> End(Func<long[], IReadOnlyList<int[]>?>? sessionsOf)
+    {
+        EndedAt = Samples.Latest;
+        var ended = Samples;
+        Samples = new SampleColumns();
+        return ended.ToSeries(sessionsOf);
+    }
 }

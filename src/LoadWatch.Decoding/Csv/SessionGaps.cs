@@ -1,24 +1,24 @@
-using LoadWatch.Recordings;
-
 namespace LoadWatch.Decoding.Csv;
 
 /// <summary>Cuts the rows of one person at long gaps: a file of several people may hold the sessions of a whole day or camp.</summary>
 internal static class SessionGaps
 {
     /// <summary>A choice: longer than a half-time or a wait on the bench, shorter than the time between two sessions.</summary>
-    private const long LongestMilliseconds = 60 * 60_000;
+    public const long LongestMilliseconds = 60 * 60_000;
 
-    /// <summary>By time; within one the rows keep the order of the file. Every row is in exactly one.</summary>
-    public static IReadOnlyList<SampleSeries> Split(SampleSeries rows)
+    /// <summary>The rows of each session, by time; within one they keep the order of the file. Every row is in exactly one. Null for a single session.</summary>
+    /// <param name="times">Of the rows, milliseconds.</param>
+    /// <param name="most">Of more sessions no more than one beyond it are told apart.</param>
+    public static IReadOnlyList<int[]>? Sessions(long[] times, int most)
     {
-        if (IsOne(rows.UnixMilliseconds))
+        if (IsOne(times))
         {
-            return [rows];
+            return null;
         }
 
-        var order = ByTime(rows.UnixMilliseconds);
-        var starts = Starts(rows.UnixMilliseconds, order);
-        return starts.Count == 1 ? [rows] : [.. starts.Select((start, i) => OfFile(rows, order[start..(i + 1 < starts.Count ? starts[i + 1] : order.Length)]))];
+        var order = ByTime(times);
+        var starts = Starts(times, order, most);
+        return starts.Count == 1 ? null : [.. starts.Select((start, i) => OfFile(order[start..(i + 1 < starts.Count ? starts[i + 1] : order.Length)]))];
     }
 
     /// <summary>The usual case: in order and without a gap.</summary>
@@ -35,17 +35,17 @@ internal static class SessionGaps
         return true;
     }
 
-    private static int[] ByTime(ReadOnlySpan<long> times)
+    private static int[] ByTime(long[] times)
     {
         int[] order = [.. Enumerable.Range(0, times.Length)];
-        Array.Sort(times.ToArray(), order);
+        Array.Sort((long[])times.Clone(), order);
         return order;
     }
 
-    private static List<int> Starts(ReadOnlySpan<long> times, int[] order)
+    private static List<int> Starts(long[] times, int[] order, int most)
     {
         List<int> starts = [0];
-        for (var place = 1; place < order.Length; place++)
+        for (var place = 1; place < order.Length && starts.Count <= most; place++)
         {
             if (times[order[place]] - times[order[place - 1]] > LongestMilliseconds)
             {
@@ -56,9 +56,9 @@ internal static class SessionGaps
         return starts;
     }
 
-    private static SampleSeries OfFile(SampleSeries rows, int[] session)
+    private static int[] OfFile(int[] session)
     {
         Array.Sort(session);
-        return rows.Take(session);
+        return session;
     }
 }

@@ -115,7 +115,11 @@ internal sealed class IsoNotation : TimeNotation
         OffsetDateTimePattern.CreateWithInvariantCulture(Moment + "o<+HH>"),
     ];
 
-    protected override bool TryReadNew(ReadOnlySpan<byte> cell, out WrittenTime time)
+    private readonly IsoDigits usual = new();
+
+    protected override bool TryReadNew(ReadOnlySpan<byte> cell, out WrittenTime time) => usual.TryRead(cell, out time) || TryReadAny(cell, out time);
+
+    private static bool TryReadAny(ReadOnlySpan<byte> cell, out WrittenTime time)
     {
         var text = Text(cell);
         if (text.Length <= DateLength)
@@ -161,6 +165,7 @@ internal sealed class PatternNotation : TimeNotation
 {
     private readonly LocalDateTimePattern? local;
     private readonly OffsetDateTimePattern? withOffset;
+    private readonly MomentDigits? usual;
 
     public PatternNotation(string format)
     {
@@ -171,6 +176,7 @@ internal sealed class PatternNotation : TimeNotation
         else
         {
             local = LocalDateTimePattern.CreateWithInvariantCulture(format);
+            usual = MomentDigits.Of(format);
         }
     }
 
@@ -193,9 +199,16 @@ internal sealed class PatternNotation : TimeNotation
         }
     }
 
-    protected override bool TryReadNew(ReadOnlySpan<byte> cell, out WrittenTime time) => withOffset is not null
-        ? TryRead(withOffset, Text(cell), offsetStated: true, out time)
-        : TryRead(local!, Text(cell), out time);
+    protected override bool TryReadNew(ReadOnlySpan<byte> cell, out WrittenTime time)
+    {
+        if (usual is not null && usual.TryRead(cell, out var read))
+        {
+            time = new(null, null, read);
+            return true;
+        }
+
+        return withOffset is not null ? TryRead(withOffset, Text(cell), offsetStated: true, out time) : TryRead(local!, Text(cell), out time);
+    }
 
     private static bool HoldsOffset(string format) => format.Contains("o<", StringComparison.Ordinal);
 

@@ -17,7 +17,7 @@ internal sealed class ZoneClock(DateTimeZone zone)
 
     public DateTimeZone Zone => zone;
 
-    public Instant Place(LocalDateTime local, Instant? previous, long line)
+    public Instant Place(LocalDateTime local, Instant? previous, CsvRows rows)
     {
         if (steady.Place(local) is { } sure)
         {
@@ -28,12 +28,12 @@ internal sealed class ZoneClock(DateTimeZone zone)
         switch (mapping.Count)
         {
             case 0:
-                Skipped.Add(line);
+                Skipped.Add(rows.Line);
                 return zone.AtLeniently(local).ToInstant();
             case 1:
                 return mapping.Single().ToInstant();
             default:
-                Ambiguous.Add(line);
+                Ambiguous.Add(rows.Line);
                 var early = mapping.First().ToInstant();
                 return early < previous ? mapping.Last().ToInstant() : early;
         }

@@ -21,21 +21,29 @@ public sealed class NoticeFile(string folder) : INoticeChannel
     private static void AppendTo(string path, Notice notice)
     {
         using var file = new FileStream(path, PrivateFolder.Options(FileMode.OpenOrCreate, FileAccess.ReadWrite));
-        var text = ReadAll(file);
-        if (!NoticeLines.Hold(EndedLines(text), notice))
+        var bytes = ReadAll(file);
+        var text = Encoding.UTF8.GetString(bytes);
+        if (NoticeLines.Hold(EndedLines(text), notice))
+        {
+            // The flush of the attempt that wrote it may have failed. The system then takes what it could not write for written, and a flush alone would say
+            // yes to that: the same bytes once more, so that there is something to write.
+            file.Seek(0, SeekOrigin.Begin);
+            file.Write(bytes);
+        }
+        else
         {
             file.Seek(0, SeekOrigin.End);
             file.Write(Encoding.UTF8.GetBytes(Block(text, notice)));
         }
 
-        // Also for a notice found here: the attempt that wrote it may not have come to its flush.
         file.Flush(flushToDisk: true);
     }
 
-    private static string ReadAll(FileStream file)
+    private static byte[] ReadAll(FileStream file)
     {
-        using var reader = new StreamReader(file, Encoding.UTF8, detectEncodingFromByteOrderMarks: true, bufferSize: -1, leaveOpen: true);
-        return reader.ReadToEnd();
+        var bytes = new byte[file.Length];
+        file.ReadExactly(bytes);
+        return bytes;
     }
 
     /// <summary>Lines with their end; a last one without may be cut.</summary>

@@ -1,5 +1,6 @@
 using System.Security.Cryptography;
 using LoadWatch.Decoding;
+using LoadWatch.Decoding.Containers;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Service.Arrivals;
@@ -16,6 +17,12 @@ public sealed record ArrivalContent(
     /// <summary>The content and, for an archive, its members, each an arrival of its own; the archive comes last, when its members are known.</summary>
     public static IEnumerable<ArrivalContent> Expand(DecoderSet decoders, string sha, string path, ReadOnlyMemory<byte> bytes) =>
         Expand(decoders, sha, null, path, bytes, 0);
+
+    /// <summary>The same of one member of a file in an inbox; nothing where the member could not be unpacked.</summary>
+    /// <param name="parent">SHA-256 of the file.</param>
+    /// <param name="path">Where the file was seen.</param>
+    public static IEnumerable<ArrivalContent> ExpandMember(DecoderSet decoders, string parent, string path, ContainerMember member) =>
+        member.Problem is null ? ExpandMember(decoders, parent, path, member, depth: 1) : [];
 
     private static IEnumerable<ArrivalContent> Expand(
         DecoderSet decoders, string sha, string? parent, string path, ReadOnlyMemory<byte> bytes, int depth)
@@ -45,8 +52,7 @@ public sealed record ArrivalContent(
             }
 
             members++;
-            var inner = Convert.ToHexStringLower(SHA256.HashData(member.Bytes.Span));
-            foreach (var content in Expand(decoders, inner, parent ?? sha, $"{path}{Attribution.Inside}{member.Name}", member.Bytes, depth + 1))
+            foreach (var content in ExpandMember(decoders, parent ?? sha, path, member, depth + 1))
             {
                 yield return content;
             }
@@ -54,4 +60,7 @@ public sealed record ArrivalContent(
 
         yield return new ArrivalContent(sha, parent, path, kind, bytes, members, problems);
     }
+
+    private static IEnumerable<ArrivalContent> ExpandMember(DecoderSet decoders, string parent, string path, ContainerMember member, int depth) =>
+        Expand(decoders, Convert.ToHexStringLower(SHA256.HashData(member.Bytes.Span)), parent, $"{path}{Attribution.Inside}{member.Name}", member.Bytes, depth);
 }

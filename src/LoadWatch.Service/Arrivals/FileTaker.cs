@@ -52,19 +52,25 @@ public sealed class FileTaker(WorkingConfiguration configuration, Archive archiv
             return new Taking.Settling();
         }
 
-        switch (archive.Stage(opened.Stream, configuration.LargestFileBytes))
+        // Where nothing was staged it grew past the limit while it was read.
+        return archive.Stage(opened.Stream, configuration.LargestFileBytes) is StagedCopy copy ? Take(file, opened, settled, copy) : new Taking.Settling();
+    }
+
+    private Taking Take(FoundFile file, OpenedFile opened, bool settled, StagedCopy copy)
+    {
+        var isKept = false;
+        try
         {
-            case StagedCopy copy when SafeFile.StampOf(file.FullPath) != opened.Stamp:
-                // Written to while it was read: the next sweep reads what it has become.
+            // Written to while it was read: the next sweep reads what it has become.
+            isKept = SafeFile.StampOf(file.FullPath) == opened.Stamp && (settled || decoders.CheckCompleteness(copy.Bytes) == Completeness.Complete);
+            return isKept ? new Taking.Taken(new TakenFile(file, opened.Stamp, copy)) : new Taking.Settling();
+        }
+        finally
+        {
+            if (!isKept)
+            {
                 Archive.Discard(copy);
-                return new Taking.Settling();
-            case StagedCopy copy when !settled && decoders.CheckCompleteness(copy.Bytes) != Completeness.Complete:
-                Archive.Discard(copy);
-                return new Taking.Settling();
-            case StagedCopy copy:
-                return new Taking.Taken(new TakenFile(file, opened.Stamp, copy));
-            default:
-                return new Taking.Settling(); // It grew past the limit while it was read.
+            }
         }
     }
 

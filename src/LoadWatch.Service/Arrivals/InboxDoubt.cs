@@ -21,8 +21,8 @@ public static class InboxDoubt
             return null;
         }
 
-        // An inbox that is emptied by taking says nothing when it holds no file; the folders of people in it do.
-        var isHollow = (isEmpty && before.HeldEntries) || (inbox.Take == TakeMode.Leave && filesAreKnown && lacksFiles());
+        // An inbox that is emptied by taking, or was by its users, says nothing when it holds no file; the folders of people in it do.
+        var isHollow = (isEmpty && before.HeldEntries) || (inbox.Take == TakeMode.Leave && filesAreKnown && before.HeldFiles && lacksFiles());
         return isHollow
             ? "its folder is another one than before and holds nothing: is its share mounted? Where it was made anew on purpose, the first file in it makes it the inbox"
             : null;

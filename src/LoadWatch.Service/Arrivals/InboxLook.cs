@@ -16,5 +16,8 @@ public sealed record InboxLook(
     /// <summary>Whether another folder than before stands there, and is looked into all the same.</summary>
     public bool IsReplaced { get; init; }
 
+    /// <summary>Folders that this service has no right to look into.</summary>
+    public IReadOnlyList<string> Closed { get; init; } = [];
+
     public static InboxLook NotAvailable(Inbox inbox, string reason) => new(inbox, null, reason, 0, [], []);
 }

@@ -53,7 +53,7 @@ public sealed class InboxLooks(TimeSpan patience)
     private static InboxLook Look(Inbox inbox, WorkingConfiguration configuration, Store store, KnownFiles files, Action progress)
     {
         var before = store.Read(session => session.InboxRoots.Of(inbox.Name));
-        var known = files.Of(inbox.Name, store);
+        var known = inbox.Take == TakeMode.Move ? new KnownInbox() : files.Of(inbox.Name, store);
         try
         {
             if (AwayNow(inbox, before, known, progress) is { } reason)
@@ -66,7 +66,7 @@ public sealed class InboxLooks(TimeSpan patience)
             progress();
             var root = RootNow(inbox);
             return root is not null && Inboxes.Look(inbox, known, progress) is { } found
-                ? found with { Root = root, IsReplaced = before is not null && before.FolderId != root.FolderId }
+                ? found with { Root = root with { HeldFiles = root.HeldEntries && (inbox.Take == TakeMode.Move || found.Seen > 0) }, IsReplaced = before is not null && before.FolderId != root.FolderId }
                 : InboxLook.NotAvailable(inbox, "its folder cannot be listed");
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException)
@@ -89,6 +89,6 @@ public sealed class InboxLooks(TimeSpan patience)
     }
 
     private static InboxRoot? RootNow(Inbox inbox) => SafeFile.FolderId(inbox.Path) is { } id
-        ? new InboxRoot(inbox.Path, id, Directory.EnumerateFileSystemEntries(inbox.Path).Any())
+        ? new InboxRoot(inbox.Path, id, Directory.EnumerateFileSystemEntries(inbox.Path).Any(), HeldFiles: false)
         : null;
 }

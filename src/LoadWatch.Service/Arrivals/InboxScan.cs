@@ -13,7 +13,7 @@ public static class InboxScan
 {
     private static readonly string[] Unfinished = [".tmp", ".part", ".partial", ".crdownload", ".download"];
 
-    internal static readonly EnumerationOptions Options = new()
+    private static readonly EnumerationOptions Options = new()
     {
         RecurseSubdirectories = true,
         MaxRecursionDepth = 16,
@@ -25,7 +25,8 @@ public static class InboxScan
     /// <summary>Looks at each file, in the order in which the system lists them; false when the folder itself cannot be listed.</summary>
     /// <param name="each">Gets the path below the inbox, <c>/</c> between folders, and the absolute one. They are gone with the call: a folder may hold a
     /// million files that nothing has to be kept of.</param>
-    public static bool TryEach(Inbox inbox, SeenPath each)
+    /// <param name="eachFolder">Gets each folder that is looked into, or would be if it could, by its absolute path.</param>
+    public static bool TryEach(Inbox inbox, SeenPath each, Action<string>? eachFolder = null)
     {
         try
         {
@@ -34,7 +35,7 @@ public static class InboxScan
                 return false;
             }
 
-            using var files = new Walk(Path.TrimEndingDirectorySeparator(inbox.Path), each);
+            using var files = new Walk(Path.TrimEndingDirectorySeparator(inbox.Path), each, eachFolder);
             while (files.MoveNext())
             {
             }
@@ -76,7 +77,7 @@ public static class InboxScan
     }
 
     /// <summary>Everything happens while it walks; it lists nothing.</summary>
-    private sealed class Walk(string root, SeenPath each, bool endsAtFirst = false) : FileSystemEnumerator<bool>(root, Options)
+    private sealed class Walk(string root, SeenPath each, Action<string>? eachFolder = null, bool endsAtFirst = false) : FileSystemEnumerator<bool>(root, Options)
     {
         private char[] path = new char[1024];
 
@@ -91,7 +92,16 @@ public static class InboxScan
             return false;
         }
 
-        protected override bool ShouldRecurseIntoEntry(ref FileSystemEntry entry) => !entry.FileName.StartsWith(".");
+        protected override bool ShouldRecurseIntoEntry(ref FileSystemEntry entry)
+        {
+            if (entry.FileName.StartsWith("."))
+            {
+                return false;
+            }
+
+            eachFolder?.Invoke(entry.ToFullPath());
+            return true;
+        }
 
         protected override bool TransformEntry(ref FileSystemEntry entry) => false;
 

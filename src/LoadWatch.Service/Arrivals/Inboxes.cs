@@ -26,33 +26,8 @@ public static class Inboxes
     /// <returns>Null when the folder cannot be listed.</returns>
     public static InboxLook? Look(Inbox inbox, KnownInbox known, Action progress)
     {
-        var seen = 0;
-        var changed = new List<(FoundFile File, FileStamp Stamp)>();
-        var unreadable = new List<string>();
-        var isListed = InboxScan.TryEach(inbox, (path, fullPath) =>
-        {
-            progress();
-            if (path.SequenceEqual(inbox.Marker))
-            {
-                return;
-            }
-
-            seen++;
-            var stamp = SafeFile.StampOf(fullPath);
-            if (stamp is not null && (IsToGo(inbox) || !known.Has(path, stamp)))
-            {
-                changed.Add((new FoundFile(inbox, path.ToString(), fullPath.ToString()), stamp));
-            }
-
-            // No stamp: gone again, or a pipe or link that intake never takes, or a name whose bytes were lost on the way into a string.
-            if (stamp is null && UnreadableNames.IsOne(path))
-            {
-                unreadable.Add(path.ToString());
-            }
-        });
-        return isListed
-            ? new InboxLook(inbox, null, null, seen, [.. changed.OrderBy(found => found.File.Path, StringComparer.Ordinal)], [.. unreadable.Order(StringComparer.Ordinal), .. UnreadableNames.OfFolders(inbox)])
-            : null;
+        var listing = new InboxListing(inbox, known, progress);
+        return InboxScan.TryEach(inbox, listing.AddFile, listing.AddFolder) ? listing.Look : null;
     }
 
     /// <summary>Which folder each inbox is; written only where that changed.</summary>
@@ -117,7 +92,4 @@ public static class Inboxes
             File.SetUnixFileMode(folder, File.GetUnixFileMode(inbox));
         }
     }
-
-    /// <summary>What still stands in such an inbox is taken again, known or not: the process may have ended between its effects and its removal.</summary>
-    private static bool IsToGo(Inbox inbox) => inbox.Take == TakeMode.Move;
 }

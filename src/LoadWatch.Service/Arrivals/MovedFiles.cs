@@ -38,10 +38,11 @@ public sealed class MovedFiles(
         }
     }
 
-    /// <summary>Also true where it cannot be told: the inbox empties itself, is away, or is no longer configured.</summary>
+    /// <summary>Also true where it cannot be told: the inbox empties itself, is away, or is no longer configured, or its folder may not be looked into.</summary>
     private bool IsThere(Sighting sighting) =>
         configuration.Inboxes.FirstOrDefault(inbox => inbox.Name == sighting.Inbox) is not { Take: TakeMode.Leave } inbox
         || report.MissingInboxes.Contains(inbox.Name)
         || !Directory.Exists(inbox.Path)
+        || report.Looks.Any(look => look.Inbox.Name == inbox.Name && look.Closed.Any(folder => sighting.Path.StartsWith(folder + "/", StringComparison.Ordinal)))
         || File.Exists(Path.Combine(inbox.Path, sighting.Path.Split(Attribution.Inside)[0]));
 }

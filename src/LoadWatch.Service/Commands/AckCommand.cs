@@ -22,7 +22,7 @@ public static class AckCommand
         {
             using var workplace = Workplace.OpenToDecide(parsed.GetValue(config)!);
             var circumstances = new Circumstances(MachineClock.Now(), parsed.GetValue(by), parsed.GetValue(note));
-            return Run(workplace, parsed.GetValue(alert)!, circumstances, Console.Out, Console.Error);
+            return workplace.Settled(Run(workplace, parsed.GetValue(alert)!, circumstances, Console.Out, Console.Error));
         });
         return command;
     }

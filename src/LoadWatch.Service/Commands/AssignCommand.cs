@@ -28,7 +28,7 @@ public static class AssignCommand
             }
 
             var circumstances = new Circumstances(MachineClock.Now(), parsed.GetValue(by), parsed.GetValue(note));
-            return Run(workplace, parsed.GetValue(file)!, id!, circumstances, Console.Out, Console.Error);
+            return workplace.Settled(Run(workplace, parsed.GetValue(file)!, id!, circumstances, Console.Out, Console.Error));
         });
         return command;
     }

@@ -36,7 +36,7 @@ public static class AwayCommand
 
             var circumstances = new Circumstances(MachineClock.Now(), parsed.GetValue(by), parsed.GetValue(note));
             var meant = Kinds.First(candidate => Words.Of(candidate) == parsed.GetValue(kind));
-            return Run(workplace, id!, meant, parsed.GetValue(from), parsed.GetValue(until), circumstances, Console.Out, Console.Error);
+            return workplace.Settled(Run(workplace, id!, meant, parsed.GetValue(from), parsed.GetValue(until), circumstances, Console.Out, Console.Error));
         });
         return command;
     }

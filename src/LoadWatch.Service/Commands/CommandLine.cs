@@ -79,6 +79,7 @@ public static class CommandLine
         AssignCommand.Create(),
         ExplainCommand.Create(),
         InspectCommand.Create(),
+        LayoutCommand.Create(),
         ExportCommand.Create(),
         RebuildCommand.Create(),
         VerifyCommand.Create(),
@@ -95,7 +96,7 @@ public static class CommandLine
 
     private static int? Expected(Exception e) => e switch
     {
-        ConfigurationException => ExitCode.Configuration,
+        ConfigurationException or NewerDatabaseException => ExitCode.Configuration,
         InstanceRunningException => ExitCode.TryLater,
         DatabaseRefusedException or InvalidDataException => ExitCode.Data,
         AggregateException { InnerException: { } inner } => Expected(inner),

@@ -89,6 +89,7 @@ public static class DemoCommand
             Console.Out.WriteLine($"{Morning(morning)}: {SweepCommand.Counts(report)}");
         }
 
+        workplace.Store.Settle();
         Console.Out.WriteLine();
         var now = At(demo.Mornings[^1], workplace);
         BriefCommand.Print(workplace, null, new Briefs(workplace.Configuration, now, report!.Unreadable, report.MissingInboxes));

@@ -29,7 +29,7 @@ public static class ExitCode
     /// <summary>Not allowed.</summary>
     public const int NoPermission = 77;
 
-    /// <summary>The configuration is wrong.</summary>
+    /// <summary>The configuration is wrong, or the program is older than the database.</summary>
     public const int Configuration = 78;
 
     /// <summary>Stopped by a signal.</summary>

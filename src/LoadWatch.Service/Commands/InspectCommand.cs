@@ -2,6 +2,7 @@ using System.CommandLine;
 using System.Security.Cryptography;
 using System.Text;
 using LoadWatch.Decoding;
+using LoadWatch.Decoding.Containers;
 using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
@@ -15,7 +16,11 @@ namespace LoadWatch.Service.Commands;
 /// <summary><c>loadwatch inspect</c>: what is in files; nothing is taken in.</summary>
 public static class InspectCommand
 {
+    // Without a configuration: the most that one can set.
     private const long LargestFileBytes = 512L * 1024 * 1024;
+
+    // Larger ones that are text are read as a stream, whatever their size.
+    private const long HeldWholeBytes = 32L * 1024 * 1024;
 
     public static Command Create()
     {
@@ -56,8 +61,10 @@ public static class InspectCommand
 
     private static int Run(IEnumerable<string> names, bool json, string? configPath)
     {
-        var decoders = new DecoderSet(configPath is null ? Decoding.Csv.BuiltInLayouts.All : ConfigurationReader.Read(configPath).Layouts);
-        var lines = names.AsParallel().AsOrdered().SelectMany(name => Inspect(decoders, name)).AsSequential();
+        var configuration = configPath is null ? null : ConfigurationReader.Read(configPath);
+        var largest = configuration?.LargestFileBytes ?? LargestFileBytes;
+        var decoders = new DecoderSet(configuration?.Layouts ?? Decoding.Csv.BuiltInLayouts.All, ContainerLimits.For(largest));
+        var lines = names.AsParallel().AsOrdered().SelectMany(name => Inspect(decoders, name, largest)).AsSequential();
         using var output = new StreamWriter(Console.OpenStandardOutput(), new UTF8Encoding(false), 1 << 16);
         if (json)
         {
@@ -74,12 +81,12 @@ public static class InspectCommand
         return ExitCode.Ok;
     }
 
-    private static IEnumerable<InspectLine> Inspect(DecoderSet decoders, string name)
+    private static IEnumerable<InspectLine> Inspect(DecoderSet decoders, string name, long largest)
     {
         switch (SafeFile.Open(name))
         {
             case OpenedFile opened:
-                return Inspect(decoders, name, opened);
+                return Inspect(decoders, name, opened, largest);
             case UnopenedFile unopened:
                 return [InspectLine.Unreadable(name, unopened.Reason)];
             default:
@@ -87,13 +94,18 @@ public static class InspectCommand
         }
     }
 
-    private static IEnumerable<InspectLine> Inspect(DecoderSet decoders, string name, OpenedFile opened)
+    private static IEnumerable<InspectLine> Inspect(DecoderSet decoders, string name, OpenedFile opened, long largest)
     {
         using (opened)
         {
-            if (opened.Stamp.Size > LargestFileBytes)
+            if (opened.Stamp.Size > HeldWholeBytes && IsText(opened.Stream))
             {
-                return [InspectLine.Unreadable(name, $"larger than {LargestFileBytes / (1024 * 1024)} MB")];
+                return Through(decoders, name);
+            }
+
+            if (opened.Stamp.Size > largest)
+            {
+                return [InspectLine.Unreadable(name, $"larger than {largest / (1024 * 1024)} MB")];
             }
 
             if (ReadAll(opened) is not { } bytes)
@@ -103,6 +115,32 @@ public static class InspectCommand
 
             var sha = Convert.ToHexStringLower(SHA256.HashData(bytes));
             return ArrivalContent.Expand(decoders, sha, name, bytes).SelectMany(content => Of(decoders, content)).ToList();
+        }
+    }
+
+    private static bool IsText(FileStream stream)
+    {
+        var head = new byte[DecoderSet.HeadLength];
+        var length = stream.ReadAtLeast(head, head.Length, throwOnEndOfStream: false);
+        stream.Position = 0;
+        return DecoderSet.Recognise(head.AsSpan(0, length)) == ContentKind.Text;
+    }
+
+    /// <summary>A large CSV, of which no more is held than the sessions under way.</summary>
+    private static IEnumerable<InspectLine> Through(DecoderSet decoders, string name)
+    {
+        var unknown = new DecodedFile("csv", FileType: null, SourceName: null, [], []);
+        var lines = new List<InspectLine>();
+        try
+        {
+            var (file, isRefused) = decoders.ReadText(() => SafeFile.Reopen(name), recording => lines.Add(InspectLine.Of(name, unknown, recording)));
+            return isRefused || lines.Count == 0
+                ? [InspectLine.WithoutRecording(name, file.Kind, file.Problems) with { Table = TableText(file.Table) }]
+                : lines.ConvertAll(line => line with { Problems = [.. file.Problems.Select(ProblemLine.Of)] });
+        }
+        catch (IOException)
+        {
+            return [InspectLine.Unreadable(name, "it could not be read to its end")];
         }
     }
 

@@ -32,6 +32,6 @@ public static class RebuildCommand
         }
 
         Console.Out.WriteLine($"Rebuilt: {sweep.Report.Recomputed} arrivals, {sweep.Report.PeopleComputed} people.");
-        return ExitCode.Ok;
+        return workplace.Settled(ExitCode.Ok);
     }
 }

@@ -30,6 +30,7 @@ public static class RunCommand
             workplace.Configuration.Inboxes.Count,
             workplace.Configuration.Contacts.Count,
             DateTimeZoneProviders.Tzdb.VersionId);
-        return await ServiceRun.ToTheEndAsync(host, cancel);
+        var code = await ServiceRun.ToTheEndAsync(host, cancel);
+        return code == ExitCode.Ok ? workplace.Settled(code) : code;
     }
 }

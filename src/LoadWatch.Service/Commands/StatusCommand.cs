@@ -95,7 +95,7 @@ public static class StatusCommand
         return new StoredSummary(
             Enum.GetValues<ArrivalState>().ToDictionary(state => Words.Of(state), state => counts.GetValueOrDefault(state), StringComparer.Ordinal),
             session.Notices.Backlog().Count,
-            [.. session.Notices.MissedDeliveries().Select(missed => $"{MissedNotices.Subject(missed.Channel, missed.Contact)} {MissedNotices.Sentence(missed)}")],
+            [.. MissedNotices.All(session, workplace.Configuration).Select(missed => $"{MissedNotices.Subject(missed.Channel, missed.Contact)} {MissedNotices.Sentence(missed)}")],
             workplace.Configuration.People.Count);
     }
 

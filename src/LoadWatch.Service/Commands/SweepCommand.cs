@@ -41,7 +41,7 @@ public static class SweepCommand
         }
 
         Print(report);
-        return ExitCode.Ok;
+        return workplace.Settled(ExitCode.Ok);
     }
 
     public static void Print(SweepReport report)

@@ -79,6 +79,14 @@ public sealed class Workplace : IDisposable
     /// <inheritdoc cref="OpenToWork"/>
     public static Workplace OpenToDecide(string configPath) => OpenToRead(configPath);
 
+    /// <summary>To be called when a command's work is done: see <see cref="Store.Settle"/>.</summary>
+    /// <returns>The exit code that was given.</returns>
+    public int Settled(int code)
+    {
+        Store.Settle();
+        return code;
+    }
+
     /// <summary>Takes over a new configuration; its data folder stays the one that is open.</summary>
     public WorkingConfiguration Adopt(WorkingConfiguration configuration) => Configuration = configuration;
 

@@ -41,6 +41,7 @@ public sealed class ConfigurationReader
         var computation = new ComputationSettings
         {
             UsableShareWanted = file.Computation.UsableShareWanted,
+            Quality = file.Computation.Quality,
             HeartRateReserveBounds = Ascending(file.Computation.HeartRateReserveBounds, "$.computation.heart_rate_reserve_bounds"),
             PowerBounds = Ascending(file.Computation.PowerBounds, "$.computation.power_bounds"),
             SpeedBounds = Ascending(file.Computation.SpeedBounds, "$.computation.speed_bounds"),

@@ -3,6 +3,7 @@ using System.Text.Json.Serialization;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
 using LoadWatch.People;
+using LoadWatch.Quality;
 using NodaTime;
 
 namespace LoadWatch.Service.Configuration;
@@ -191,6 +192,9 @@ public sealed record ComputationEntry
     /// <summary>Share of the sampled time with a usable reading below which a channel gives no load and no stimulus. 0 to 1.</summary>
     [Range(0.0, 1.0)]
     public double UsableShareWanted { get; init; } = 0.5;
+
+    /// <summary>From when on a heart rate is no reading of the person.</summary>
+    public QualityLimits Quality { get; init; } = new();
 
     /// <summary>Inner bounds of the heart-rate zones, fractions of heart-rate reserve, where thresholds are not anchored.</summary>
     public IReadOnlyList<double> HeartRateReserveBounds { get; init; } = [0.30, 0.40, 0.60, 0.90];

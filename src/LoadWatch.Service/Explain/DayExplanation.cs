@@ -37,6 +37,7 @@ public static class DayExplanation
         text.AppendLine(CultureInfo.InvariantCulture, $"{OneLine.Of(known.Name)}, {Words.Date(day.Date)}: {Words.Of(day.State)}{(day.StateSource is { } source ? $" ({source})" : "")}");
         AppendDecisions(text, session, known.Id, day.Date);
         AppendTrends(text, day, configuration.Groups[known.Group].LoadQuantity);
+        ReferenceExplanation.Append(text, known, configuration.Groups[known.Group], TableBasis.Of(configuration, session).AnchorsOf(known), day.Date);
         var recorded = session.Activities.OfPerson(known.Id, day.Date, day.Date).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
         foreach (var activity in PersonTraining.Of(session, configuration, TableBasis.Of(configuration, session), known, day.Date, day.Date).Activities)
         {
@@ -118,6 +119,11 @@ public static class DayExplanation
         foreach (var remark in activity.Remarks)
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"    {OneLine.Of(remark)}");
+        }
+
+        if (recorded is not null)
+        {
+            CutText.Append(text, recorded.Values, recorded.Session.LocalOffset, "    ");
         }
 
         foreach (var contribution in recorded?.Merge.Contributions ?? [])

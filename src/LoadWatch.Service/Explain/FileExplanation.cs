@@ -24,9 +24,15 @@ public static class FileExplanation
         var text = new StringBuilder();
         text.AppendLine(CultureInfo.InvariantCulture, $"{arrival.Sha}  {arrival.Kind ?? "not decoded yet"}, {arrival.Size} bytes");
         text.AppendLine(CultureInfo.InvariantCulture, $"    {Words.Of(arrival.State)}{(arrival.Reason is { } reason ? $": {OneLine.Of(reason)}" : "")}");
+        foreach (var problem in session.Arrivals.Problems(arrival.Sha).Where(problem => problem != arrival.Reason))
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {OneLine.Of(problem)}");
+        }
+
         foreach (var sighting in session.Sightings.Of(arrival.Sha))
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    seen as {OneLine.Of(sighting.Path)} in {OneLine.Of(sighting.Inbox)}{(sighting.Latest ? "" : ", where other bytes are by now")}");
+            var mismatch = NameAndContent.Mismatch(sighting.Path, arrival.Kind) is { } words ? $", {words}" : "";
+            text.AppendLine(CultureInfo.InvariantCulture, $"    seen as {OneLine.Of(sighting.Path)} in {OneLine.Of(sighting.Inbox)}{(sighting.Latest ? "" : ", where other bytes are by now")}{mismatch}");
         }
 
         if (arrival.ParentSha is { } parent)
@@ -57,6 +63,10 @@ public static class FileExplanation
             foreach (var contribution in merge.Contributions.Where(one => one.Key == recording.Key))
             {
                 text.AppendLine(CultureInfo.InvariantCulture, $"    part {recording.Part} in the session {Words.Start(merge.Session.Start.WithOffset(merge.Session.LocalOffset))} of {recording.Person}: {ContributionText.Of(session, merge, contribution)}");
+                if (contribution.Role is ContributionRole.Wins or ContributionRole.Gives && session.Activities.Get(merge.Winner.Key) is { } activity)
+                {
+                    CutText.Append(text, activity.Values, merge.Session.LocalOffset, "        ");
+                }
             }
         }
     }

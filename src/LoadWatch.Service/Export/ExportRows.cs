@@ -15,6 +15,8 @@ public sealed record ZonesLine(string Basis, IReadOnlyList<double> Bounds, strin
 public sealed record TimeInZoneLine(
     IReadOnlyList<double>? HeartRate, IReadOnlyList<double>? Power, IReadOnlyList<double>? Speed, IReadOnlyDictionary<string, ZonesLine> Zones);
 
+public sealed record CutLine(string? Channel, string Reason, string? From, string? To, int Readings, double Seconds, double Share);
+
 public sealed record BandLine(double Low, double Mid, double High);
 
 public sealed record StimulusLine(
@@ -43,6 +45,7 @@ public sealed record ActivityLine(
     double? PowerMeanW,
     double? PowerMaxW,
     IReadOnlyDictionary<string, double> UsableShare,
+    IReadOnlyList<CutLine> Cuts,
     IReadOnlyList<StimulusLine> Stimulus,
     IReadOnlyList<RecordingLine> Recordings,
     IReadOnlyList<string> Tables,

@@ -4,6 +4,7 @@ using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.Loads;
 using LoadWatch.People;
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Pipeline;
@@ -86,12 +87,24 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
             values.PowerMeanWatts,
             values.PowerMaxWatts,
             activity.UsableShare.OrderBy(pair => pair.Key).ToDictionary(pair => Words.Channel(pair.Key), pair => pair.Value, StringComparer.Ordinal),
+            values.Cuts.Select(OfCut).ToList(),
             activity.Stimulus.Select(OfStimulus).ToList(),
             recorded?.Merge.Contributions.OrderBy(one => one.Key, StringComparer.Ordinal).Select(OfRecording).ToList() ?? [],
             activity.Tables,
             activity.AddsLoad,
             activity.Remarks);
     }
+
+    private static CutLine OfCut(Cut cut) => new(
+        cut.Channel is { } channel ? Words.Channel(channel) : null,
+        Words.Of(cut.Reason),
+        Moment(cut.Stretch.From),
+        Moment(cut.Stretch.To),
+        cut.Readings,
+        cut.Milliseconds / 1000.0,
+        cut.Share);
+
+    private static string? Moment(long? unixMilliseconds) => unixMilliseconds is { } known ? Words.Utc(Instant.FromUnixTimeMilliseconds(known)) : null;
 
     private RecordingLine OfRecording(Contribution contribution)
     {

@@ -1,6 +1,7 @@
 using System.Globalization;
 using System.Text.Encodings.Web;
 using System.Text.Json;
+using System.Text.Json.Nodes;
 using LoadWatch.Recordings;
 using NodaTime;
 using NodaTime.Text;
@@ -16,12 +17,16 @@ public static class Words
         Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping,
     };
 
+    private static JsonSerializerOptions Indented { get; } = new(Json) { WriteIndented = true, NewLine = "\n" };
+
     /// <summary>One line of JSON. What would turn the reading direction or show nothing stands as an escape, so a terminal shows it as it is.</summary>
-    public static string Line(object value)
-    {
-        var json = JsonSerializer.Serialize(value, value.GetType(), Json);
-        return json.All(IsPlain) ? json : string.Concat(json.Select(letter => IsPlain(letter) ? letter.ToString() : $"\\u{(int)letter:x4}"));
-    }
+    public static string Line(object value) => Escaped(JsonSerializer.Serialize(value, value.GetType(), Json));
+
+    /// <summary>The same over several lines, to be read and changed by a person.</summary>
+    public static string Lines(JsonNode value) => string.Join('\n', value.ToJsonString(Indented).Split('\n').Select(Escaped));
+
+    private static string Escaped(string json) =>
+        json.All(IsPlain) ? json : string.Concat(json.Select(letter => IsPlain(letter) ? letter.ToString() : $"\\u{(int)letter:x4}"));
 
     /// <summary>ISO 8601 with offset.</summary>
     public static string Start(OffsetDateTime start) => OffsetDateTimePattern.Rfc3339.Format(start);

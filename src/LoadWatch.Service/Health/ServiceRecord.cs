@@ -23,6 +23,7 @@ public sealed class ServiceRecord(Instant? started)
     private SweepReport? report;
     private Instant scanned;
     private HashSet<string> away = [];
+    private Dictionary<string, Instant> awaySince = [];
     private int failures;
 
     /// <summary>Sweeps that ended well.</summary>
@@ -43,6 +44,8 @@ public sealed class ServiceRecord(Instant? started)
         lock (guard)
         {
             (report, scanned, configurationFault) = (ended, now, fault);
+            awaySince = ended.Looks.Where(look => look.Away is not null).Select(look => look.Inbox.Name)
+                .ToDictionary(inbox => inbox, inbox => awaySince.TryGetValue(inbox, out var since) ? since : now, StringComparer.Ordinal);
             (lastDone, failingSince, clockFault, clockFaultSince) = (now, null, null, null);
             lastMail = ended.MailsDelivered > 0 ? now : lastMail;
             behindSince = ended.PeopleBehind > 0 ? behindSince ?? now : null;
@@ -110,7 +113,7 @@ public sealed class ServiceRecord(Instant? started)
                 Started = Words.Utc(started),
                 Sweep = sweep,
                 LastDone = Words.Utc(lastDone),
-                Inboxes = [.. (report?.Looks ?? []).Select(look => StatusOf(look, scanned))],
+                Inboxes = [.. (report?.Looks ?? []).Select(look => StatusOf(look))],
                 Settling = report?.Settling ?? 0,
                 Unreadable = report?.Unreadable.Count ?? 0,
                 LastMail = Words.Utc(lastMail),
@@ -124,6 +127,6 @@ public sealed class ServiceRecord(Instant? started)
         }
     }
 
-    private static InboxStatus StatusOf(InboxLook look, Instant scanned) =>
-        new(look.Inbox.Name, Words.Utc(scanned)!, look.Root?.FolderId, look.Seen, look.Away);
+    private InboxStatus StatusOf(InboxLook look) =>
+        new(look.Inbox.Name, Words.Utc(scanned)!, look.Root?.FolderId, look.Seen, look.Away, Words.Utc(started is not null && awaySince.TryGetValue(look.Inbox.Name, out var since) ? since : (Instant?)null));
 }

@@ -26,6 +26,9 @@ public sealed record ServiceStatus
 
     public IReadOnlyList<InboxStatus> Inboxes { get; init; } = [];
 
+    /// <summary>Arrivals that are through while the first sweep is under way; null afterwards.</summary>
+    public int? Through { get; init; }
+
     /// <summary>Arrivals that wait to be decoded.</summary>
     public int? Waiting { get; init; }
 
@@ -52,7 +55,7 @@ public sealed record ServiceStatus
     /// <summary>When the notice was decided that has waited longest.</summary>
     public string? OldestDelivery { get; init; }
 
-    /// <summary>When the first of the waiting mails was tried first.</summary>
+    /// <summary>When the first of the waiting mails was tried first, since which none got through to anybody.</summary>
     public string? MailTriedSince { get; init; }
 
     /// <summary>When a mail was last handed over by this process.</summary>
@@ -97,7 +100,8 @@ public sealed record SweepStatus(string Started, string? Ended, string Result, s
 /// <param name="Folder">Device and inode of the folder; null while the inbox is not available.</param>
 /// <param name="Files">Files seen.</param>
 /// <param name="Away">Why it is not available.</param>
-public sealed record InboxStatus(string Name, string LastScan, string? Folder, int Files, string? Away);
+/// <param name="AwaySince">Since when the service has found it so; null where a single <c>loadwatch sweep</c> wrote this, which does not look again.</param>
+public sealed record InboxStatus(string Name, string LastScan, string? Folder, int Files, string? Away, string? AwaySince = null);
 
 /// <summary>One thing that is wrong with the service.</summary>
 /// <param name="Name">Stays the same while it lasts.</param>

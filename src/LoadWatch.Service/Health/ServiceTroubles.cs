@@ -17,6 +17,7 @@ public static class ServiceTroubles
     private static readonly Duration BehindForLong = Duration.FromDays(1);
     private static readonly Duration FailingForLong = Duration.FromMinutes(10);
     private static readonly Duration ClockMayTake = Duration.FromMinutes(10);
+    private static readonly Duration AwayMayTake = Duration.FromMinutes(10);
 
     public static IReadOnlyList<Trouble> Of(ServiceStatus status, Instant now) =>
         [.. All(status, now).OfType<Trouble>().OrderByDescending(trouble => trouble.Critical)];
@@ -29,8 +30,7 @@ public static class ServiceTroubles
     [
         Failing(status, now),
         Clock(status, now),
-        .. status.Inboxes.Where(inbox => inbox.Away is not null)
-            .Select(inbox => new Trouble($"inbox-{inbox.Name}", true, $"The inbox \"{inbox.Name}\" is not available: {inbox.Away}.")),
+        .. status.Inboxes.Where(inbox => inbox.Away is not null).Select(inbox => Away(inbox, now)),
         Mail(status, now),
         Disk(status),
         Behind(status, now),
@@ -48,6 +48,12 @@ public static class ServiceTroubles
     private static Trouble? Failing(ServiceStatus status, Instant now) => status.Sweep is { FailingSince: { } since, Failure: var failure }
         ? new Trouble("sweeps-fail", Age(since, now) >= FailingForLong, $"Sweeps have failed since {since}: {failure ?? "the one under way tries again"}.")
         : null;
+
+    /// <summary>A share that is mounted late or away for a moment is nothing to act on yet; a single sweep does not look again, so its one look counts.</summary>
+    private static Trouble Away(InboxStatus inbox, Instant now) => new(
+        $"inbox-{inbox.Name}",
+        inbox.AwaySince is null || Age(inbox.AwaySince, now) >= AwayMayTake,
+        $"The inbox \"{inbox.Name}\" is not available: {inbox.Away}.");
 
     private static Trouble? Clock(ServiceStatus status, Instant now) => status.ClockFault is { } fault
         ? new Trouble("clock-behind", Age(status.ClockFaultSince, now) >= ClockMayTake, fault)

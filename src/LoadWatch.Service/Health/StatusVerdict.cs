@@ -54,7 +54,15 @@ public sealed record StatusVerdict(int Code, string Sentence, IReadOnlyList<Trou
         var age = ServiceTroubles.Age(status.LastDone, now);
         if (age > maxAge || (age is null && ServiceTroubles.Age(status.Started ?? status.Written, now) > maxAge))
         {
-            yield return new Trouble("no-sweep", true, status.LastDone is { } last ? $"No sweep has ended well since {last}." : "No sweep has ended well yet.");
+            yield return IsGettingOn(status, now) ? UnderWay(status) : new Trouble("no-sweep", true, status.LastDone is { } last ? $"No sweep has ended well since {last}." : "No sweep has ended well yet.");
         }
     }
+
+    /// <summary>A large import takes its time, and commits what it has at every group of files.</summary>
+    private static bool IsGettingOn(ServiceStatus status, Instant now) =>
+        status is { Started: not null, Sweep: { Result: "running", FailingSince: null } } && ServiceTroubles.Age(status.LastCommit, now) <= SweepMayTake;
+
+    private static Trouble UnderWay(ServiceStatus status) => new("sweep-under-way", false, status.LastDone is { } last
+        ? $"A sweep has been under way since {status.Sweep!.Started} and gets on; the last one ended {last}."
+        : $"The first sweep has been under way since {status.Sweep!.Started} and gets on: {status.Through ?? 0} arrivals are in, {status.Waiting ?? 0} wait.");
 }

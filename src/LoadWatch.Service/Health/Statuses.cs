@@ -52,6 +52,7 @@ public sealed class Statuses(Workplace workplace, ServiceRecord state)
         return status with
         {
             Waiting = session.Arrivals.Count(ArrivalState.Waiting),
+            Through = status.LastDone is null ? session.Arrivals.CountByState().Where(pair => pair.Key != ArrivalState.Waiting).Sum(pair => pair.Value) : null,
             Held = session.Arrivals.Count(ArrivalState.Held),
             OldestWaiting = Words.Utc(session.Sightings.OldestWaiting()),
             LastArrival = Words.Utc(session.Sightings.Newest()),

@@ -57,6 +57,7 @@ public sealed class Adoption
     }
 
     /// <summary>Asks for everything, whatever it stands on.</summary>
+    /// <param name="state">Over rows only where a user asks for it: a rebuild that was stopped goes on, but one that is asked for leaves nothing out.</param>
     public void AskForAll(RebuildState state)
     {
         session.Outdated.AddAll();
@@ -91,7 +92,7 @@ public sealed class Adoption
 
         if (Changed(BasisParts.Formulas) || Changed(BasisParts.Computation))
         {
-            AskForAll(RebuildState.OverRows);
+            AskForAll(RebuildState.None);
         }
 
         if (Changed(BasisParts.Layouts))

@@ -62,7 +62,7 @@ public sealed class Answers(WorkingConfiguration configuration, Instant now)
         .Where(at => via[at] == '|')
         .Select(at => via[..at])
         .Any(table => Decision.ScopeOf(table) is { } scope
-            && (session.TableRows.OfScope(scope).Any(row => row.Kind == RowKind.Answers) || session.TableVersions.Applied().Any(version => version.Scope == scope)));
+            && (session.TableRows.OfScope(scope).Any(row => row.Kind == RowKind.Answers) || session.TableVersions.Applied(scope).Count > 0));
 
     /// <summary>A row that went and came back within one moment decides a nanosecond later.</summary>
     private static Decision WithFreeId(Decision decision, HashSet<string> taken)

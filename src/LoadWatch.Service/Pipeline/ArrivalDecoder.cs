@@ -15,6 +15,9 @@ namespace LoadWatch.Service.Pipeline;
 /// <summary>From bytes to a judged arrival with all its values. Pure but for reading the archive; safe to use from several threads.</summary>
 public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSet decoders, Archive archive, Instant now)
 {
+    private readonly MemberPlaces places = new(decoders);
+    private readonly LastOriginal originals = new(archive);
+
     /// <summary>What tables say that recordings are computed with; the sweep keeps it up to date.</summary>
     public TableBasis Basis { get; set; } = TableBasis.Of(configuration);
 
@@ -57,14 +60,16 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
 
         var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings.Concat(file.Worn), now, configuration.Devices, configuration.People);
         var verdict = OfTheRoster(ArrivalVerdict.Of(file, owners, now));
-        if (!decided && Implausible(file, verdict) is { } reason)
+        var cut = verdict.Person is not null && file.Table is null ? Usable(file).Select(Cut).ToList() : [];
+        if (!decided && Implausible(cut, verdict) is { } reason)
         {
             verdict = new ArrivalVerdict(ArrivalState.Held, reason, null);
         }
 
-        var recordings = verdict.Person is { } owner && file.Table is null ? Usable(file).Select(recording => Compute(content.Sha, recording, configuration.People[owner], file.SourceName)) : [];
+        var recordings = verdict.Person is { } owner ? cut.Select(usable => Compute(content.Sha, usable, configuration.People[owner], file.SourceName)) : [];
         return new DecodedArrival(content.Sha, file.Kind, verdict, recordings.ToList())
         {
+            Problems = Problems(file),
             Table = verdict.State == ArrivalState.Stored ? file.Table : null,
             Questions = verdict.State == ArrivalState.Stored && file.Table is not null ? RowsNotUsed(file.Problems) : [],
         };
@@ -78,6 +83,13 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         _ => [$"{problems.Count} rows are not used, the first two: {problems[0]}; {problems[1]}"],
     };
 
+    private static IReadOnlyList<string> Problems(DecodedFile file)
+    {
+        var more = file.Problems.Count - DecodedArrival.MostProblems;
+        var told = file.Problems.Take(DecodedArrival.MostProblems).Select(problem => problem.ToString());
+        return more > 0 ? [.. told, $"{more} more"] : [.. told];
+    }
+
     private static List<string> Subjects(DecodedFile file) =>
         [.. file.Recordings.Select(recording => recording.Subject).OfType<string>().Distinct(StringComparer.Ordinal)];
 
@@ -89,18 +101,17 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         var questions = new List<string>();
         foreach (var (recording, person) in owned)
         {
-            var implausible = person is null ? null : Plausibility.Of(recording, person, Basis.AnchorsOf(person), LocalStart.Of(recording, person).Date);
             if (person is null)
             {
                 questions.Add($"\"{recording.Subject}\" is not in the roster: a line there, an alias or a line in devices.csv takes the recording up");
             }
-            else if (implausible is not null)
+            else if (Cut(recording) is var usable && Implausible(usable, person) is { } implausible)
             {
                 questions.Add($"the recording of \"{recording.Subject}\" is left out: {implausible}");
             }
             else
             {
-                recordings.Add(Compute(content.Sha, recording, person, file.SourceName));
+                recordings.Add(Compute(content.Sha, usable, person, file.SourceName));
             }
         }
 
@@ -110,6 +121,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
             : new ArrivalVerdict(ArrivalState.Held, owned.Count == 0 ? "no recording with a date" : $"owner unknown: none of the {subjects.Count} people in it is in the roster", null);
         return new DecodedArrival(content.Sha, file.Kind, verdict, recordings)
         {
+            Problems = Problems(file),
             Questions = recordings.Count > 0 ? asked : [],
         };
     }
@@ -125,9 +137,12 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     private IEnumerable<Recording> Usable(DecodedFile file) => file.Recordings.Where(recording => ArrivalVerdict.IsUsable(recording, now));
 
     /// <summary>Why a file cannot be its owner's, by the first of its recordings that says so.</summary>
-    private string? Implausible(DecodedFile file, ArrivalVerdict verdict) => verdict.Person is { } id && configuration.People.TryGetValue(id, out var person)
-        ? Usable(file).Select(recording => Plausibility.Of(recording, person, Basis.AnchorsOf(person), LocalStart.Of(recording, person).Date)).FirstOrDefault(reason => reason is not null)
+    private string? Implausible(IEnumerable<UsableRecording> recordings, ArrivalVerdict verdict) => verdict.Person is { } id && configuration.People.TryGetValue(id, out var person)
+        ? recordings.Select(recording => Implausible(recording, person)).FirstOrDefault(reason => reason is not null)
         : null;
+
+    private string? Implausible(UsableRecording recording, Person person) =>
+        Plausibility.Of(recording, person, Basis.AnchorsOf(person), LocalStart.Of(recording.Recording, person).Date);
 
     /// <summary>Folders only name people of the roster; one whom a decision names may have left it since.</summary>
     private ArrivalVerdict OfTheRoster(ArrivalVerdict verdict) =>
@@ -140,7 +155,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     public ArrivalContent Read(Arrival arrival, string path) => Content(arrival, path, archive.Read(arrival.ObjectSha));
 
     private ArrivalContent Content(Arrival arrival, string path, byte[] original) =>
-        ArrivalContent.Expand(decoders, arrival.ObjectSha, path, original).FirstOrDefault(content => content.Sha == arrival.Sha)
+        places.Find(arrival.ObjectSha, path, original, arrival.Sha)
         ?? throw new InvalidDataException($"the archive object {arrival.ObjectSha[..12]} no longer holds {arrival.Sha[..12]}");
 
     /// <summary>What a stored table holds.</summary>
@@ -153,7 +168,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     {
         try
         {
-            return archive.ReadWhole(arrival.ObjectSha) is { } bytes ? decoders.Decode(Content(arrival, "", bytes).Bytes, Salvages(arrival.Sha)).Recordings : [];
+            return originals.ReadWhole(arrival.ObjectSha) is { } bytes ? decoders.Decode(Content(arrival, "", bytes).Bytes, Salvages(arrival.Sha)).Recordings : [];
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException or InvalidDataException)
         {
@@ -162,25 +177,29 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     }
 
     /// <summary>Everything computed from a recording of a person of the roster: of the part within the planned session, where the plan has its time.</summary>
-    public ActivityValues Values(Recording recording, string person) =>
-        Values(new UsableRecording(recording, configuration.Computation.UsableShareWanted), configuration.People[person]);
+    public ActivityValues Values(Recording recording, string person) => Values(Cut(recording), configuration.People[person]);
 
-    private ComputedRecording Compute(string sha, Recording recording, Person person, string? sourceName)
-    {
-        var usable = new UsableRecording(recording, configuration.Computation.UsableShareWanted);
-        return new ComputedRecording(RecordingSummaries.Of(sha, usable, person, sourceName), recording, Values(usable, person));
-    }
+    /// <summary>Makes one recording of those of an activity, each by the quality cuts of the configuration; null where none gives anything.</summary>
+    public Recording? Merged(SessionPlan plan, IReadOnlyDictionary<string, Recording> recordings) =>
+        MergedSession.Of(plan, recordings, configuration.Computation.Quality);
+
+    private UsableRecording Cut(Recording recording) => new(recording, configuration.Computation.UsableShareWanted, configuration.Computation.Quality);
+
+    private ComputedRecording Compute(string sha, UsableRecording usable, Person person, string? sourceName) =>
+        new(RecordingSummaries.Of(sha, usable, person, sourceName), usable.Recording, Values(usable, person));
 
     private ActivityValues Values(UsableRecording usable, Person person)
     {
         var recording = usable.Recording;
         var planned = Basis.Planned(person, LocalStart.Of(recording, person).Date);
-        var cut = SessionWindow.Of(recording, planned) is { } window ? RecordingCut.To(recording, window.Start, window.End) : new CutRecording(recording, []);
+        var cut = SessionWindow.Of(recording, planned) is { } window ? RecordingCut.To(recording, window.Start, window.End) : CutRecording.Nothing(recording);
         var values = cut.LeftOut.Count == 0
             ? ActivityComputation.Compute(usable, person, Basis.AnchorsOf(person), configuration.Computation)
             : ActivityComputation.Compute(cut.Recording, person, Basis.AnchorsOf(person), configuration.Computation);
         IReadOnlyList<string> missing = recording.CutOff is { } reason ? [$"only its beginning is used: {reason}"] : [];
-        return cut.LeftOut.Count + missing.Count == 0 ? values : values with { Remarks = [.. missing, .. cut.LeftOut, .. values.Remarks] };
+        return cut.LeftOut.Count + missing.Count == 0
+            ? values
+            : values with { Remarks = [.. missing, .. cut.LeftOut, .. values.Remarks], Cuts = [.. cut.Cuts, .. values.Cuts] };
     }
 
     private static ArrivalVerdict ContainerVerdict(ArrivalContent content) => (content.Members, content.Problems.Count) switch

@@ -21,7 +21,7 @@ public sealed class ArrivalEffects(StoreSession session, RecordingShelf shelf, S
         session.Recordings.RemoveArrival(arrival.Sha);
         session.Questions.Ask(arrival.Sha, arrival.Questions);
 
-        session.Arrivals.Settle(arrival.Sha, arrival.Verdict.State, arrival.Kind, arrival.Verdict.Reason, arrival.Verdict.Person);
+        session.Arrivals.Settle(arrival.Sha, arrival.Verdict.State, arrival.Kind, arrival.Verdict.Reason, arrival.Verdict.Person, arrival.Problems);
         if (arrival.Table is { } table)
         {
             session.TableVersions.Note(arrival.Sha, table.Layout, table.IsNamedByFolder);

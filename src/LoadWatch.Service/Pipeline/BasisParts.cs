@@ -1,6 +1,7 @@
 using System.Security.Cryptography;
 using System.Text.Json;
 using LoadWatch.Activities;
+using LoadWatch.Days;
 using LoadWatch.People;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Stimulus;
@@ -52,7 +53,7 @@ public static class BasisParts
     /// <summary>Of a person: the group, and the names by which a plan may mean it.</summary>
     public const string Group = "group";
 
-    /// <summary>Of a person: what days and rules take from the group.</summary>
+    /// <summary>Of a person: what days and rules take from the group, and how they are computed.</summary>
     public const string Rules = "rules";
 
     private static readonly JsonSerializerOptions Json = new(ConfigurationJson.Options) { WriteIndented = false };
@@ -85,7 +86,7 @@ public static class BasisParts
             new(person.Id, HeartRate, Date(person.HeartRateInvalidFrom)),
             new(person.Id, Anchors, string.Join('\n', configuration.Anchors.Of(person.Id).Select(Line).Order(StringComparer.Ordinal))),
             new(person.Id, Group, Hash(new { person.Group, Names = GroupNames(configuration) })),
-            new(person.Id, Rules, Hash(new { person.Name, group.LoadQuantity, group.LoadFallbacks, group.Limits })),
+            new(person.Id, Rules, Hash(new { person.Name, group.LoadQuantity, group.LoadFallbacks, group.Limits, LoadCalendar.Version })),
         ];
     }
 

@@ -1,6 +1,7 @@
 using LoadWatch.Alerts;
 using LoadWatch.Days;
 using LoadWatch.Delivery.Page;
+using LoadWatch.Findings;
 using LoadWatch.Notices;
 using LoadWatch.People;
 using LoadWatch.Recordings;
@@ -20,6 +21,10 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     private const int DaysBack = 400;
     private const int RemarkDays = 14;
     private const int RefusedDays = 7;
+
+    /// <summary>A note is told for a week; it may stand for twelve.</summary>
+    private const int NoteDays = 7;
+
     private const string Mail = "mail";
 
     /// <summary>Freezes every brief that is due, and every update of a changed list, with its deliveries.</summary>
@@ -117,8 +122,11 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
             .Select(alert => News(alert, news[alert.Id].ToList()))
             .Where(item => item.Alert.State is AlertState.Unacknowledged or AlertState.Acknowledged || item.ReturnedSince)
             .ToList();
-        return new BriefSubject(person, configuration.Groups[person.Group], days, alerts, Remarks(days));
+        return new BriefSubject(person, configuration.Groups[person.Group], days, alerts, Remarks(days)) { Notes = Notes(session, person, through) };
     }
+
+    private static List<Finding> Notes(StoreSession session, Person person, LocalDate date) =>
+        [.. session.Findings.OfPerson(person.Id, date, date).Where(finding => finding.Severity == Severity.Note && finding.Since > date.PlusDays(-NoteDays))];
 
     private static AlertNews News(Alert alert, List<AlertChange> changes)
     {

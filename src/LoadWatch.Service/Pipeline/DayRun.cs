@@ -1,6 +1,7 @@
 using LoadWatch.Activities;
 using LoadWatch.Days;
 using LoadWatch.Findings;
+using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Plans;
 using LoadWatch.Rows;
@@ -28,6 +29,7 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
     private const int QuestionDays = 60;
 
     private readonly PersonPlans plans = new(configuration);
+    private readonly Lazy<ReferencePeriods> periods = new(() => ReferencePeriods.Of(person, configuration.Groups[person.Group], basis.AnchorsOf(person)));
     private LocalDate? replacedTo;
     private IReadOnlyList<Day>? before;
     private LocalDate? next;
@@ -50,17 +52,21 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
             Marks = marks,
             OldestQuestion = through.PlusDays(-QuestionDays),
         };
-        before = [.. before.Concat(series.Days).TakeLast(LoadCalendar.LookBackDays)];
         (replacedTo, next) = (to, to.PlusDays(1));
+        var wanted = Wanted(to.PlusDays(1));
+        before = [.. before.Concat(series.Days).Where(day => day.Date >= wanted)];
         return stretch;
     }
 
     private IReadOnlyList<Day> Begin(StoreSession session)
     {
-        var days = session.Days.Before(person.Id, from);
+        var days = session.Days.Before(person.Id, from, Wanted(from));
         next = days.Count > 0 ? from : Earlier(session.Activities.FirstOfPerson(person.Id), session.TableRows.FirstOfPerson(person.Id));
         return days;
     }
+
+    /// <summary>The first of the days that are looked back at from a date.</summary>
+    private LocalDate Wanted(LocalDate date) => periods.Value.Reach(date) ?? date.PlusDays(-LoadCalendar.LookBackDays);
 
     private static LocalDate? Earlier(LocalDate? one, LocalDate? other) => one is { } a && other is { } b ? LocalDate.Min(a, b) : one ?? other;
 
@@ -69,8 +75,15 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
         var since = before!.Count == 0 ? LocalDate.MinIsoValue : first;
         var tests = session.TableRows.OfPerson(person.Id, RowKind.Tests, since, to).Select(row => new DatedTest(row.Date, (TestRow)row.Content)).ToList();
         var counted = training.Activities.Where(activity => activity.Date <= through);
-        return PersonSeries.Continue(person, configuration.Groups[person.Group], before, [.. counted], tests, plans.Of(session, person, since, to), to);
+        return PersonSeries.Continue(person, configuration.Groups[person.Group], before, [.. counted], tests, plans.Of(session, person, since, to), to, Changes(session, first, to));
     }
+
+    private ReferenceChanges Changes(StoreSession session, LocalDate first, LocalDate to) => new(periods.Value, () => new RestatedSessions(
+        person,
+        basis.AnchorsOf(person),
+        configuration.Computation,
+        periods.Value.Quantities,
+        session.Activities.Histograms(person.Id, before!.Count == 0 ? first : before[0].Date, to)));
 
     private IEnumerable<Question> Questions(JoinResult training) => training.Questions
         .Select(question => new Question(person.Id, question.MayWait ? question.Date.PlusDays(WaitDays) : question.Date, question.Sentence, question.Date))

@@ -12,6 +12,12 @@ public sealed record DecodedArrival(string Sha, string Kind, ArrivalVerdict Verd
     /// <summary>Where stored and a table: what it holds. Its rows are taken up once everything of the group is settled (<see cref="Tables"/>).</summary>
     public DecodedTable? Table { get; init; }
 
+    /// <summary>What is wrong with the content, with the place of each: the first <see cref="MostProblems"/>, then how many more.</summary>
+    public IReadOnlyList<string> Problems { get; init; } = [];
+
+    /// <summary>More of them help nobody, and a hostile file cannot fill the store. A choice.</summary>
+    public const int MostProblems = 20;
+
     /// <summary>What staff would have to say so that all of it counts.</summary>
     public IReadOnlyList<string> Questions { get; init; } = [];
 }

@@ -28,8 +28,6 @@ public sealed class Deliveries(Store store, IReadOnlyList<INoticeChannel> channe
             Settle(pending, Attempt(pending), now);
             report.Advanced();
         }
-
-        report.Missed = store.Read(session => session.Notices.MissedDeliveries()).Count;
     }
 
     /// <summary>In the channels' order; one that is no longer configured comes first, it takes no time.</summary>

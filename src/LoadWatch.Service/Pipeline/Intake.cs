@@ -160,11 +160,14 @@ public sealed class Intake(
         KillPoint.Pass("settled");
         foreach (var file in group.Taken)
         {
-            known.Add(file.File, file.Stamp);
             file.Copy.Dispose();
             if (file.File.Inbox.Take == TakeMode.Move)
             {
                 InboxRemoval.Remove(file);
+            }
+            else
+            {
+                known.Add(file.File, file.Stamp);
             }
         }
     }

@@ -1,5 +1,6 @@
 using LoadWatch.Notices;
 using LoadWatch.People;
+using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Notices;
 using NodaTime;
@@ -10,6 +11,13 @@ namespace LoadWatch.Service.Pipeline;
 public static class MissedNotices
 {
     private static readonly Duration Overdue = Duration.FromDays(1);
+
+    /// <summary>Those of whoever is still told anything.</summary>
+    public static IEnumerable<MissedDelivery> All(StoreSession session, WorkingConfiguration configuration)
+    {
+        var told = configuration.Contacts.Select(contact => contact.Id).Concat(configuration.Administrators.Select(administrator => administrator.Id)).ToHashSet(StringComparer.Ordinal);
+        return session.Notices.MissedDeliveries().Where(missed => told.Contains(missed.Contact));
+    }
 
     /// <summary>Those given up, and those that have been tried for a day or longer. A way that the contact no longer has is left out.</summary>
     public static IEnumerable<BriefLine> Lines(StoreSession session, Contact contact, IReadOnlyList<Storage.Notices.Delivery> ways, Instant now) =>

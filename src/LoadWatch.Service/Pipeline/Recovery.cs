@@ -16,6 +16,9 @@ public sealed class Recovery(Store store, Archive archive, ArchiveReader reader,
     /// <summary>Why an arrival is refused whose original is not what it was.</summary>
     public const string Damaged = "its original in the archive is missing or damaged";
 
+    /// <summary>Why an arrival is refused that no process but a child may touch again.</summary>
+    public static string Poisonous => $"poisonous: decoding ended the process or broke its limits {ArrivalTable.MostAttempts} times";
+
     private const int ProbedTogether = 64;
 
     /// <summary>Whether a waiting arrival has ended a child before: then nothing waits for it (I-14).</summary>
@@ -56,7 +59,7 @@ public sealed class Recovery(Store store, Archive archive, ArchiveReader reader,
             store.Write(session => session.Arrivals.CountAttempt(arrival.Sha));
             if (arrival.Attempts + 1 >= ArrivalTable.MostAttempts)
             {
-                Refuse(arrival, $"poisonous: decoding ended the process or broke its limits {ArrivalTable.MostAttempts} times");
+                Refuse(arrival, Poisonous);
             }
         }
         else

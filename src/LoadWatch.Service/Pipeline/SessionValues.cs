@@ -40,7 +40,7 @@ public sealed class SessionValues(ArrivalDecoder decoder, RecordingShelf shelf)
         try
         {
             var recordings = plan.Givers.ToDictionary(key => key, key => shelf.Find(key, arrivalOf)!, StringComparer.Ordinal);
-            var values = MergedSession.Of(plan, recordings) is { } merged ? decoder.Values(merged, plan.Winner.Person) : new ActivityValues();
+            var values = decoder.Merged(plan, recordings) is { } merged ? decoder.Values(merged, plan.Winner.Person) : new ActivityValues();
             return WithRemarks(plan, values with { Remarks = [.. MergedSession.Partial(plan, values), .. values.Remarks] });
         }
         catch (Exception e) when (ArrivalDecoder.IsDefect(e))

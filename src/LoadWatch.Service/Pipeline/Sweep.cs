@@ -1,4 +1,5 @@
 using LoadWatch.Decoding;
+using LoadWatch.Decoding.Containers;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
@@ -36,7 +37,7 @@ public sealed class Sweep
         this.now = now;
         this.known = known ?? new KnownFiles();
         var archive = new Archive(folder);
-        var decoders = new DecoderSet(configuration.Layouts);
+        var decoders = new DecoderSet(configuration.Layouts, ContainerLimits.For(configuration.LargestFileBytes));
         decoder = new ArrivalDecoder(configuration, decoders, archive, now)
         {
             Salvages = sha => configuration.Inboxes.Any(inbox => inbox.Salvage) && configuration.Salvages(store.Read(session => session.Sightings.Of(sha)).Select(sighting => sighting.Inbox)),
@@ -49,7 +50,7 @@ public sealed class Sweep
         answers = new Answers(configuration, now);
         assigned = new AssignedFiles(configuration, store, reader, settlement, Report);
         tables = new Tables(configuration, store, decoder, Report);
-        recomputations = new Recomputations(store, reader, settlement, Report);
+        recomputations = new Recomputations(store, archive, reader, settlement, probe, Report);
         briefs = new Briefs(configuration, now, Report.Unreadable, Report.MissingInboxes);
     }
 
@@ -155,6 +156,7 @@ public sealed class Sweep
         new DayUpdate(configuration, store, now, Report).Run(cancel, new Evaluation(configuration, answers, briefs, now, Report).Run);
         KillPoint.Pass("evaluated");
         new Deliveries(store, Deliveries.Channels(configuration), Report).Run(now);
+        Report.Missed = store.Read(session => MissedNotices.All(session, configuration).Count());
         new Pages(configuration, store, briefs, Report).Rewrite(now, all: !PagesAreCurrent || isNewConfiguration || Report.HasNews);
         PagesAreWritten = true;
     }

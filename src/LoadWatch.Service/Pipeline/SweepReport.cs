@@ -83,6 +83,7 @@ public sealed class SweepReport
         Looks = looks;
         Seen += looks.Sum(look => look.Seen);
         MissingInboxes.AddRange(looks.Where(look => look.Away is not null).Select(look => look.Inbox.Name));
+        Unreadable.AddRange(looks.SelectMany(look => look.Closed).Select(folder => new BriefLine(folder + "/", "there is no right to look into this folder: nothing comes in from it")));
         Unreadable.AddRange(looks.Where(look => look.Unreadable.Count > 0).Select(UnreadableNames.Line));
     }
 

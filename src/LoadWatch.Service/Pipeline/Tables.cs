@@ -18,22 +18,16 @@ public sealed class Tables(WorkingConfiguration configuration, Store store, Arri
 
     public void TakeUp(CancellationToken cancel)
     {
-        var (seen, applied) = store.Read(session => (
-            session.TableVersions.Seen().ToLookup(version => version.Scope, StringComparer.Ordinal),
-            session.TableVersions.Applied().ToLookup(version => version.Scope, StringComparer.Ordinal)));
-        foreach (var scope in seen.Concat(applied).Select(table => table.Key).Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal))
+        foreach (var scope in store.Read(session => session.TableVersions.Changed()))
         {
             cancel.ThrowIfCancellationRequested();
-            var (versions, done) = (seen[scope].ToList(), applied[scope].ToList());
-            if (!versions.SequenceEqual(done))
-            {
-                Update(scope, versions, done);
-                report.Advanced();
-            }
+            var (seen, applied) = store.Read(session => (session.TableVersions.Seen(scope), session.TableVersions.Applied(scope)));
+            Update(scope, seen, applied);
+            report.Advanced();
         }
     }
 
-    private void Update(string scope, List<TableVersion> versions, List<TableVersion> done)
+    private void Update(string scope, IReadOnlyList<TableVersion> versions, IReadOnlyList<TableVersion> done)
     {
         KillPoint.Pass("rows");
         var before = store.Read(session => session.TableRows.OfScope(scope));

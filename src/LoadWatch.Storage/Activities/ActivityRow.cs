@@ -1,5 +1,6 @@
 using LoadWatch.Activities;
 using LoadWatch.Loads;
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 using LoadWatch.Stimulus;
 using LoadWatch.Storage.Dialects;
@@ -11,6 +12,8 @@ namespace LoadWatch.Storage.Activities;
 /// <summary>A row of <c>activity</c> beside that of its winning recording.</summary>
 internal sealed class ActivityRow : RecordingRow
 {
+    private const string None = "[]";
+
     public string Key { get; init; } = "";
 
     public LocalDate Date { get; init; }
@@ -38,6 +41,8 @@ internal sealed class ActivityRow : RecordingRow
 
     public string Stimulus { get; init; } = "";
 
+    public string Cuts { get; init; } = "";
+
     /// <summary>Null for a row of before checksums were kept.</summary>
     public string? Checksum { get; set; }
 
@@ -59,6 +64,7 @@ internal sealed class ActivityRow : RecordingRow
         Remarks = JsonText.Write(activity.Values.Remarks),
         Quantities = JsonText.Write(activity.Values.Quantities),
         Stimulus = JsonText.Write(activity.Values.Stimulus),
+        Cuts = activity.Values.Cuts.Count == 0 ? None : JsonText.Write(activity.Values.Cuts),
     };
 
     /// <summary>As <see cref="Recordings"/> holds them.</summary>
@@ -77,6 +83,7 @@ internal sealed class ActivityRow : RecordingRow
             Remarks = JsonText.Read<List<string>>(Remarks),
             Quantities = JsonText.Read<List<Quantity>>(Quantities),
             Stimulus = JsonText.Read<List<RegionStimulus>>(Stimulus),
+            Cuts = Cuts == None ? [] : JsonText.Read<List<Cut>>(Cuts),
         };
         return new StoredActivity(ToMerge(), values);
     }

@@ -12,10 +12,10 @@ public sealed class ActivityTable
     private const string Insert = """
         INSERT INTO activity (
             key, sha, part, person, date, recordings, session, heart_rate_mean_bpm, heart_rate_max_bpm,
-            power_mean_watts, power_max_watts, usable_share, times_in_zone, remarks, quantities, stimulus, checksum)
+            power_mean_watts, power_max_watts, usable_share, times_in_zone, remarks, quantities, stimulus, cuts, checksum)
         VALUES (
             @Key, @Sha, @Part, @Person, @Date, @Recordings, @Session, @HeartRateMeanBpm, @HeartRateMaxBpm,
-            @PowerMeanWatts, @PowerMaxWatts, @UsableShare, @TimesInZone, @Remarks, @Quantities, @Stimulus, @Checksum)
+            @PowerMeanWatts, @PowerMaxWatts, @UsableShare, @TimesInZone, @Remarks, @Quantities, @Stimulus, @Cuts, @Checksum)
         """;
 
     private const string InsertHistogram = "INSERT INTO histogram (activity, channel, bins) VALUES (@Activity, @Channel, @Bins)";
@@ -29,7 +29,7 @@ public sealed class ActivityTable
 
     private const string SelectActivities = """
         SELECT r.*, a.key, a.date, a.recordings, a.session, a.heart_rate_mean_bpm, a.heart_rate_max_bpm,
-            a.power_mean_watts, a.power_max_watts, a.usable_share, a.times_in_zone, a.remarks, a.quantities, a.stimulus, a.checksum
+            a.power_mean_watts, a.power_max_watts, a.usable_share, a.times_in_zone, a.remarks, a.quantities, a.stimulus, a.cuts, a.checksum
         FROM activity a JOIN recording r ON r.sha = a.sha AND r.part = a.part
         """;
 
@@ -48,6 +48,11 @@ public sealed class ActivityTable
     private const string SelectPage = SelectActivities + " WHERE a.key > @after ORDER BY a.key LIMIT @most";
     private const string SelectOne = SelectActivities + " WHERE a.key = @key";
     private const string SelectHistograms = "SELECT activity, channel, bins FROM histogram WHERE activity >= @first AND activity <= @last ORDER BY activity, channel";
+
+    private const string SelectHistogramsOfPerson = """
+        SELECT h.activity, h.channel, h.bins FROM activity a JOIN histogram h ON h.activity = a.key
+        WHERE a.person = @person AND a.date >= @from AND a.date <= @to AND h.channel IN ('heart_rate', 'speed')
+        """;
 
     private readonly StoreSession session;
 
@@ -94,12 +99,24 @@ public sealed class ActivityTable
     public IReadOnlyList<StoredActivity> All(LocalDate? from = null, LocalDate? to = null) =>
         Select(InDates, new { from = from ?? LocalDate.MinIsoValue, to = to ?? LocalDate.MaxIsoValue });
 
+    /// <summary>The activity of a key, or null.</summary>
+    public StoredActivity? Get(string key) => session.Row<ActivityRow>(SelectOne, new { key })?.ToActivity();
+
     /// <summary>The first date of a person's activities, or null.</summary>
     public LocalDate? FirstOfPerson(string person) => session.Row<FirstRow>(SelectFirst, new { person })?.Date;
 
     /// <summary>Time by value of every channel that has one.</summary>
     public IReadOnlyDictionary<Channel, Histogram> Histograms(string key) => session.Rows<HistogramRow>(SelectHistograms, new { first = key, last = key })
         .ToDictionary(row => Words<Channel>.Parse(row.Channel), row => HistogramCodec.Read(row.Bins));
+
+    /// <summary>Time by heart rate and by speed of a person's activities of the dates, both ends included, by key of the activity.</summary>
+    public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, Histogram>> Histograms(string person, LocalDate from, LocalDate to) =>
+        session.Rows<HistogramRow>(SelectHistogramsOfPerson, new { person, from, to })
+            .GroupBy(row => row.Activity, StringComparer.Ordinal)
+            .ToDictionary(
+                rows => rows.Key,
+                IReadOnlyDictionary<Channel, Histogram> (rows) => rows.ToDictionary(row => Words<Channel>.Parse(row.Channel), row => HistogramCodec.Read(row.Bins)),
+                StringComparer.Ordinal);
 
     /// <summary>How a person's activities were made whose winning recordings start in the range, both ends included, sorted by that start and by key.</summary>
     public IReadOnlyList<StoredMerge> Merges(string person, Instant from, Instant to) =>

@@ -6,9 +6,11 @@ namespace LoadWatch.Storage.Configurations;
 public sealed class DerivedRows
 {
     private const string Upsert = "INSERT INTO derived_state (key, value) VALUES (@key, @value) ON CONFLICT (key) DO UPDATE SET value = excluded.value";
+    private const string Delete = "DELETE FROM derived_state WHERE key = @key";
     private const string Select = "SELECT value FROM derived_state WHERE key = @key";
     private const string ConfigHashKey = "config_hash";
     private const string RebuildKey = "rebuild";
+    private const string RecomputingKey = "recomputing";
 
     private static readonly string[] DeletesOfPerson =
     [
@@ -51,6 +53,22 @@ public sealed class DerivedRows
 
     /// <inheritdoc cref="SetConfigHash"/>
     public void SetRebuild(RebuildState state) => Set(RebuildKey, Words<RebuildState>.Of(state));
+
+    /// <summary>Whether outdated contents are being decoded again: true in a new process where the last one ended amid them.</summary>
+    public bool IsRecomputing() => Value(RecomputingKey) is not null;
+
+    /// <inheritdoc cref="SetConfigHash"/>
+    public void SetRecomputing(bool value)
+    {
+        if (value)
+        {
+            Set(RecomputingKey, "yes");
+        }
+        else if (IsRecomputing())
+        {
+            session.Execute(Delete, new { key = RecomputingKey });
+        }
+    }
 
     /// <summary>Deletes every derived row. What is true stays: arrivals, sightings, decisions, alerts, notices, configurations, evaluations.</summary>
     public void Empty()

@@ -5,7 +5,7 @@ public enum RebuildState
 {
     None,
 
-    /// <summary>Over the rows that stand: each stays until its successor is there.</summary>
+    /// <summary>By command, over the rows that stand: each stays until its successor is there.</summary>
     OverRows,
 
     /// <summary>The rows are gone or unreadable: nothing can be judged before they are back.</summary>

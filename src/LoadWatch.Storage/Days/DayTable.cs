@@ -51,9 +51,10 @@ public sealed class DayTable
             .ConvertAll(row => row.ToDay());
 
     /// <summary>The days before a date that later ones look back at, oldest first, with their sessions; the last of them with what it carries.</summary>
-    public IReadOnlyList<Day> Before(string person, LocalDate date)
+    /// <param name="first">Null: the look-back, <see cref="LoadCalendar.LookBackDays"/>.</param>
+    public IReadOnlyList<Day> Before(string person, LocalDate date, LocalDate? first = null)
     {
-        var values = new { person, from = date.PlusDays(-LoadCalendar.LookBackDays), last = date.PlusDays(-1) };
+        var values = new { person, from = first ?? date.PlusDays(-LoadCalendar.LookBackDays), last = date.PlusDays(-1) };
         return [.. session.Rows<DayRow>(SelectBefore, values).Select(row => row.ToDay()), .. session.Rows<DayRow>(SelectLast, values).Select(row => row.ToDay())];
     }
 }

@@ -15,6 +15,7 @@ public abstract class Dialect
     /// <exception cref="DatabaseRefusedException">Not ours, or newer than this program, or the engine is too old.</exception>
     public abstract void Prepare();
 
+    /// <summary>Neither a commit nor closing it empties the log by itself: an error of that would be told to nobody.</summary>
     public abstract DbConnection OpenWriter();
 
     /// <summary>A connection on which nothing can be written.</summary>
@@ -29,11 +30,11 @@ public abstract class Dialect
     /// <summary>Whether an error says that bytes reported as durable may not be.</summary>
     public abstract bool LostDurability(DbException error);
 
-    /// <summary>Brings erased content out of the side files too. False when a reader was in the way.</summary>
+    /// <summary>Brings what the side files hold into the database, and erased content out of them. False when a reader was in the way.</summary>
     public abstract bool Checkpoint(DbConnection connection);
 
-    /// <summary>Closing the connection then leaves the log as it is: nothing is written over a disk that has lost something.</summary>
-    public abstract void LeaveLog(DbConnection connection);
+    /// <summary>Lets the last connection remove a log that holds nothing more when it is closed.</summary>
+    public abstract void RemoveEmptyLog(DbConnection connection);
 
     /// <summary>Copies the whole database as it is at one moment, while others write, into a file that must not be there yet.</summary>
     public abstract void CopyTo(DbConnection connection, string path);
@@ -43,4 +44,7 @@ public abstract class Dialect
 }
 
 /// <summary>A database that LoadWatch does not work on, and why.</summary>
-public sealed class DatabaseRefusedException(string message) : Exception(message);
+public class DatabaseRefusedException(string message) : Exception(message);
+
+/// <summary>The database is sound, and of a schema that this program does not know yet: the program is the wrong one.</summary>
+public sealed class NewerDatabaseException(string message) : DatabaseRefusedException(message);

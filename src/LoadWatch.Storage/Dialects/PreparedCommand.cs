@@ -73,6 +73,8 @@ internal sealed class PreparedCommand(PreparedConnection connection) : DbCommand
         inner.Parameters.Clear();
         foreach (DbParameter parameter in given.Parameters)
         {
+            // The provider looks a bare name up under each of its prefixes, through all names of the statement.
+            parameter.ParameterName = parameter.ParameterName is ['@', ..] name ? name : "@" + parameter.ParameterName;
             inner.Parameters.Add(parameter);
         }
 

@@ -15,14 +15,13 @@ internal sealed class SqliteSchema(string connectionString)
     public static IReadOnlyList<string> Scripts { get; } =
         [.. Home.GetManifestResourceNames().Where(IsScript).Order(StringComparer.Ordinal)];
 
-    /// <exception cref="DatabaseRefusedException">The file is newer than this program.</exception>
+    /// <exception cref="NewerDatabaseException">The file is newer than this program.</exception>
     public void Upgrade(DbConnection connection)
     {
         var had = connection.ExecuteScalar<long>("PRAGMA user_version");
         if (had > Scripts.Count)
         {
-            throw new DatabaseRefusedException(
-                $"{connection.DataSource} was written by a newer LoadWatch (schema {had}, known up to {Scripts.Count})");
+            throw new NewerDatabaseException(NewerThanKnown(connection.DataSource, had));
         }
 
         if (had < Scripts.Count)
@@ -31,6 +30,9 @@ internal sealed class SqliteSchema(string connectionString)
             connection.Execute(string.Create(CultureInfo.InvariantCulture, $"PRAGMA user_version={Scripts.Count}"));
         }
     }
+
+    internal static string NewerThanKnown(string path, long had) =>
+        string.Create(CultureInfo.InvariantCulture, $"{path} was written by a newer LoadWatch (schema {had}, known up to {Scripts.Count}): put that program back, or the backup of before its upgrade");
 
     private static bool IsScript(string name) =>
         name.Contains(".Schema.", StringComparison.Ordinal) && name.EndsWith(".sql", StringComparison.Ordinal);

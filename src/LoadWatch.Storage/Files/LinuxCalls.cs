@@ -14,6 +14,9 @@ internal static partial class LinuxCalls
     public const int EmptyPath = 0x1000;
     public const int NoFollowAt = 0x100;
 
+    /// <summary>To list a folder and go into it: R_OK and X_OK.</summary>
+    public const int ToEnter = 4 | 1;
+
     /// <summary>SYNC_FILE_RANGE_WRITE.</summary>
     public const uint StartWriting = 2;
 
@@ -31,6 +34,9 @@ internal static partial class LinuxCalls
 
     [LibraryImport("libc", EntryPoint = "open", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
     public static partial int Open(string path, int flags);
+
+    [LibraryImport("libc", EntryPoint = "access", SetLastError = true, StringMarshalling = StringMarshalling.Utf8)]
+    public static partial int Access(string path, int mode);
 
     [LibraryImport("libc", EntryPoint = "close", SetLastError = true)]
     public static partial int Close(int descriptor);
@@ -126,6 +132,7 @@ internal static class Errno
     public const int NoEntry = 2;
     public const int Interrupted = 4;
     public const int NoDevice = 6;
+    public const int WouldBlock = 11;
     public const int AccessDenied = 13;
     public const int Exists = 17;
     public const int NotAFolder = 20;

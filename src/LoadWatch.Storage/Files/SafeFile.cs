@@ -13,6 +13,15 @@ public static class SafeFile
     /// <summary>Opens a file for reading. No problem of the file is thrown; all are answers.</summary>
     public static FileOpening Open(string path) => OperatingSystem.IsLinux() ? OpenOnLinux(path) : OpenElsewhere(path);
 
+    /// <summary>The same once more for a file that is read several times, at its start.</summary>
+    /// <exception cref="IOException">It cannot be opened any more.</exception>
+    public static FileStream Reopen(string path) => Open(path) switch
+    {
+        OpenedFile opened => opened.Stream,
+        UnopenedFile unopened => throw new IOException(unopened.Reason),
+        _ => throw new InvalidOperationException("a file is opened or not"),
+    };
+
     /// <inheritdoc cref="StampOf(string)"/>
     /// <remarks>For paths of which there are very many: on Linux none becomes a string.</remarks>
     public static FileStamp? StampOf(ReadOnlySpan<char> path)
@@ -43,6 +52,10 @@ public static class SafeFile
 
         return StatusOf(path) is { IsRegular: true } status ? status.Stamp : null;
     }
+
+    /// <summary>False for a folder that may not be listed or whose files may not be reached.</summary>
+    public static bool MayEnter(string folder) =>
+        !OperatingSystem.IsLinux() || LinuxCalls.Access(folder, LinuxCalls.ToEnter) == 0 || Marshal.GetLastPInvokeError() is not (Errno.AccessDenied or Errno.NotPermitted);
 
     /// <summary>
     /// The identity of a folder, null where there is none. It changes when the folder is made anew or something is mounted over it,

@@ -45,5 +45,8 @@ public sealed record LastBrief(LocalDate Date, long AlertPosition);
 
 /// <summary>Deliveries that are still to be made.</summary>
 /// <param name="Oldest">When the notice was decided that has waited longest; null where none waits.</param>
-/// <param name="MailTriedSince">When the first of the waiting mails was tried first; null where none was tried.</param>
+/// <param name="MailTriedSince">
+/// When the first of the waiting mails was tried first, of those since which no mail that was decided later got through: one mailbox that takes none is no
+/// sign that mail does not leave. Null where there is none.
+/// </param>
 public sealed record DeliveryBacklog(int Count, Instant? Oldest, Instant? MailTriedSince);

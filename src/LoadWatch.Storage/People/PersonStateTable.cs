@@ -14,8 +14,6 @@ public sealed class PersonStateTable
             marks = person_state.marks + 1
         """;
 
-    private const string SelectDirty = "SELECT person, dirty_from FROM person_state WHERE dirty_from IS NOT NULL ORDER BY person";
-
     private const string Clear = """
         INSERT INTO person_state (person, computed_to) VALUES (@person, @through)
         ON CONFLICT (person) DO UPDATE SET
@@ -42,9 +40,6 @@ public sealed class PersonStateTable
     /// <summary>Everybody whose days are or were to be computed, sorted.</summary>
     public IReadOnlyList<string> All() => session.Rows<string>(SelectPeople);
 
-    /// <summary>Whose days are to be computed again, sorted by person.</summary>
-    public IReadOnlyList<DirtyPerson> Dirty() => session.Rows<Row>(SelectDirty).ConvertAll(row => new DirtyPerson(row.Person, row.DirtyFrom));
-
     /// <summary>Whose days are to be computed again, or are not computed up to a date; sorted by person.</summary>
     public IReadOnlyList<PersonBehind> Behind(LocalDate date) =>
         session.Rows<BehindRow>(SelectBehind, new { date }).ConvertAll(row => new PersonBehind(row.Person, row.DirtyFrom, row.ComputedTo, row.Marks));
@@ -69,16 +64,9 @@ public sealed class PersonStateTable
 
     private sealed class Row
     {
-        public string Person { get; init; } = "";
-
-        public LocalDate DirtyFrom { get; init; }
-
         public LocalDate ComputedTo { get; init; }
     }
 }
-
-/// <param name="From">The first date to compute.</param>
-public sealed record DirtyPerson(string Person, LocalDate From);
 
 /// <param name="DirtyFrom">The first date to compute again, or null.</param>
 /// <param name="ComputedTo">The last date computed, or null before any.</param>

@@ -24,7 +24,8 @@ public sealed class ArrivalTable
     private const string SelectStarting = $"SELECT {Columns} FROM arrival WHERE sha >= @digits AND sha < @beyond ORDER BY sha";
     private const string CountAll = "SELECT state, COUNT(*) AS number FROM arrival GROUP BY state";
     private const string CountOne = "SELECT COUNT(*) FROM arrival WHERE state = @state";
-    private const string Update = "UPDATE arrival SET state = @state, kind = @kind, reason = @reason, person = @person WHERE sha = @sha";
+    private const string Update = "UPDATE arrival SET state = @state, kind = @kind, reason = @reason, person = @person, problems = @problems WHERE sha = @sha";
+    private const string SelectProblems = "SELECT problems FROM arrival WHERE sha = @sha";
     private const string AddAttempt = "UPDATE arrival SET attempts = attempts + 1 WHERE sha = @sha";
 
     private readonly StoreSession session;
@@ -63,9 +64,14 @@ public sealed class ArrivalTable
         return Enum.GetValues<ArrivalState>().ToDictionary(state => state, state => counts.GetValueOrDefault(state));
     }
 
+    /// <param name="problems">What is wrong with the content, the first that many of them; null: nothing.</param>
     /// <exception cref="InvalidOperationException">There is no such arrival.</exception>
-    public void Settle(string sha, ArrivalState state, string? kind, string? reason, string? person) =>
-        OfOne(session.Execute(Update, new { sha, state = Words<ArrivalState>.Of(state), kind, reason, person }), sha);
+    public void Settle(string sha, ArrivalState state, string? kind, string? reason, string? person, IReadOnlyList<string>? problems = null) =>
+        OfOne(session.Execute(Update, new { sha, state = Words<ArrivalState>.Of(state), kind, reason, person, problems = JsonText.Write(problems ?? []) }), sha);
+
+    /// <summary>What is wrong with an arrival, as it was settled; empty where there is no such arrival.</summary>
+    public IReadOnlyList<string> Problems(string sha) =>
+        session.Value<string>(SelectProblems, new { sha }) is { } problems ? JsonText.Read<List<string>>(problems) : [];
 
     /// <summary>Counts a decoding that brought its process down.</summary>
     /// <exception cref="InvalidOperationException">There is no such arrival.</exception>

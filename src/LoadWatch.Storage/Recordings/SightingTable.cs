@@ -19,7 +19,6 @@ public sealed class SightingTable
         """;
 
     private const string Delete = "DELETE FROM sighting WHERE inbox = @Inbox AND path = @Path AND sha = @Sha";
-    private const string SelectLatest = $"SELECT {Columns} FROM sighting WHERE inbox = @inbox AND latest = 1";
     private const string CountLatestOf = "SELECT COUNT(*) FROM sighting WHERE inbox = @inbox AND latest = 1";
 
     // The empty text keeps the index out of it: going through the table in its own order is faster than through a million places of it.
@@ -53,10 +52,6 @@ public sealed class SightingTable
     private readonly StoreSession session;
 
     internal SightingTable(StoreSession session) => this.session = session;
-
-    /// <summary>The newest content of every name in an inbox, by path.</summary>
-    public IReadOnlyDictionary<string, Sighting> Latest(string inbox) =>
-        session.Rows<Row>(SelectLatest, new { inbox }).ToDictionary(row => row.Path, row => row.ToSighting(), StringComparer.Ordinal);
 
     /// <summary>Number of names in an inbox.</summary>
     public int CountLatest(string inbox) => session.Value<int>(CountLatestOf, new { inbox });

@@ -19,12 +19,27 @@ public sealed class TableVersionTable
 
     private const string DeleteContent = "DELETE FROM table_content WHERE sha = @sha";
 
-    private const string SelectSeen = """
-        SELECT s.inbox, s.path, s.sha, s.since, c.layout, c.named_by_folder, a.person AS owner
+    // A table named by its folder: the path without whatever follows its last slash, which is all that is no slash at its end.
+    private const string AllSeen = """
+        SELECT
+            CASE c.named_by_folder
+                WHEN 1 THEN s.inbox || '/' || rtrim(s.path, replace(s.path, '/', '')) || '|' || c.layout
+                ELSE s.inbox || '/' || s.path
+            END AS scope,
+            s.path, s.sha, s.since, a.person AS owner
         FROM table_content c JOIN sighting s ON s.sha = c.sha JOIN arrival a ON a.sha = c.sha
         """;
 
-    private const string SelectApplied = "SELECT scope, path, sha, since, owner FROM table_version";
+    private const string AllApplied = "SELECT scope, path, sha, since, owner FROM table_version";
+    private const string SelectSeen = $"SELECT * FROM ({AllSeen}) AS seen WHERE scope = @scope";
+    private const string SelectApplied = $"{AllApplied} WHERE scope = @scope";
+
+    private const string SelectChanged = $"""
+        SELECT scope FROM ({AllSeen} EXCEPT {AllApplied}) AS more
+        UNION SELECT scope FROM ({AllApplied} EXCEPT {AllSeen}) AS fewer
+        ORDER BY scope
+        """;
+
     private const string DeleteApplied = "DELETE FROM table_version WHERE scope = @scope";
     private const string InsertApplied = "INSERT INTO table_version (scope, path, sha, since, owner) VALUES (@Scope, @Path, @Sha, @Since, @Owner)";
 
@@ -42,12 +57,14 @@ public sealed class TableVersionTable
     /// <summary>A content that is no table any more, as another layout reads it.</summary>
     public void Forget(string sha) => session.Execute(DeleteContent, new { sha });
 
-    /// <summary>Every version of every table, under each of its names, in the order in which they count.</summary>
-    public IReadOnlyList<TableVersion> Seen() => InOrder(session.Rows<SeenRow>(SelectSeen).Select(row => row.ToVersion()));
+    /// <summary>The tables of which other versions are seen than are applied, sorted.</summary>
+    public IReadOnlyList<string> Changed() => session.Rows<string>(SelectChanged);
+
+    /// <summary>Every version of a table, under each of its names, in the order in which they count.</summary>
+    public IReadOnlyList<TableVersion> Seen(string scope) => InOrder(session.Rows<Row>(SelectSeen, new { scope }));
 
     /// <summary>Those whose rows are in, in the order in which they were taken.</summary>
-    public IReadOnlyList<TableVersion> Applied() => InOrder(session.Rows<AppliedRow>(SelectApplied)
-        .Select(row => new TableVersion(row.Scope, row.Path, row.Sha, row.Since, row.Owner)));
+    public IReadOnlyList<TableVersion> Applied(string scope) => InOrder(session.Rows<Row>(SelectApplied, new { scope }));
 
     public void SetApplied(string scope, IReadOnlyList<TableVersion> versions)
     {
@@ -58,37 +75,16 @@ public sealed class TableVersionTable
     /// <summary>Asks for the rows of every table anew, from all of its versions; those that stand stay until then.</summary>
     public void ReplayAll() => session.Execute(Outdate);
 
-    private static List<TableVersion> InOrder(IEnumerable<TableVersion> versions) =>
+    private static List<TableVersion> InOrder(IEnumerable<Row> rows) =>
     [
-        .. versions
-            .OrderBy(version => version.Scope, StringComparer.Ordinal)
-            .ThenBy(version => version.Since)
+        .. rows
+            .Select(row => new TableVersion(row.Scope, row.Path, row.Sha, row.Since, row.Owner))
+            .OrderBy(version => version.Since)
             .ThenBy(version => version.Path, StringComparer.Ordinal)
             .ThenBy(version => version.Sha, StringComparer.Ordinal),
     ];
 
-    private sealed class SeenRow
-    {
-        public string Inbox { get; init; } = "";
-
-        public string Path { get; init; } = "";
-
-        public string Sha { get; init; } = "";
-
-        public Instant Since { get; init; }
-
-        public string Layout { get; init; } = "";
-
-        public long NamedByFolder { get; init; }
-
-        public string? Owner { get; init; }
-
-        public TableVersion ToVersion() => new(NamedByFolder == 1 ? $"{Inbox}/{Folder}|{Layout}" : $"{Inbox}/{Path}", Path, Sha, Since, Owner);
-
-        private string Folder => Path[..(Path.LastIndexOf('/') + 1)];
-    }
-
-    private sealed class AppliedRow
+    private sealed class Row
     {
         public string Scope { get; init; } = "";
 

@@ -1,3 +1,5 @@
+using LoadWatch.Tests;
+
 namespace LoadWatch.Chaos.Inputs;
 
 /// <summary>Four invented people and what the configuration says of them.</summary>
@@ -12,16 +14,7 @@ public static class Cast
 
         """;
 
-    public const string Anchors = """
-        person,date,anchor,value,unit,source,exercise
-        anna,,heart_rate_rest,50,bpm,,
-        anna,,heart_rate_max,190,bpm,,
-        bo,,heart_rate_rest,55,bpm,,
-        bo,,heart_rate_max,185,bpm,,
-        bo,,critical_power,250,W,,
-        bo,,w_prime,20000,J,,
-        bo,,power_max,1100,W,,
-        cara,,heart_rate_rest,60,bpm,,
+    public const string Anchors = SquadAnchors.Text + """
         cara,,heart_rate_max,160,bpm,,
         dan,,heart_rate_rest,48,bpm,,
         dan,,heart_rate_max,188,bpm,,

@@ -18,15 +18,17 @@ public sealed record TracedCall(string Thread, string Name, string Text, int Beg
 
 /// <summary>Runs a program under strace, which may make one call fail or kill the process at it.</summary>
 /// <param name="log">Where strace writes.</param>
-public sealed partial class Tracer(string log)
+/// <param name="opens">Whether opens are told too: at its start the runtime opens hundreds of files.</param>
+public sealed partial class Tracer(string log, bool opens = false)
 {
     /// <summary>What changes files or makes them durable. The runtime writes files by pwrite64; write is for terminals and pipes.</summary>
-    public const string Calls = "openat,pwrite64,fsync,fdatasync,syncfs,ftruncate,rename,renameat,renameat2,unlink,unlinkat,mkdir";
+    private const string Changes = "pwrite64,fsync,fdatasync,syncfs,ftruncate,rename,renameat,renameat2,unlink,unlinkat,mkdir";
 
-    /// <param name="injection">As <c>fsync:error=EIO:when=3</c>, or null to look on.</param>
+    /// <param name="injection">As <c>fsync:error=EIO:when=3</c> or <c>fsync:signal=KILL:when=3</c>, or null to look on.</param>
     public IEnumerable<string> Words(string? injection) =>
     [
-        "strace", "-f", "--seccomp-bpf", "-y", "-s", "300", "-e", $"trace={Calls}", .. injection is null ? [] : new[] { "-e", $"inject={injection}" }, "-o", log,
+        // Where the kernel stops the program at chosen calls only, it takes no signal there, and strace says nothing of that.
+        "strace", "-f", .. injection?.Contains("signal=", StringComparison.Ordinal) == true ? Array.Empty<string>() : ["--seccomp-bpf"], "-y", "-s", "300", "-e", $"trace={(opens ? "openat," : "")}{Changes}", .. injection is null ? [] : new[] { "-e", $"inject={injection}" }, "-o", log,
     ];
 
     /// <summary>The calls in the order in which they began.</summary>

@@ -12,24 +12,25 @@ public static class Databases
     private const int Damaged = 65;
     private const int InputOutput = 74;
     private const int TryLater = 75;
+    private const int Configuration = 78;
     private const int PageBytes = 4096;
 
-    /// <summary>What is done to the file, and what must be said of it.</summary>
-    private static readonly (string What, Action<string> Do, string Said)[] Damages =
+    /// <summary>What is done to the file, and what must be said of it with which exit code.</summary>
+    private static readonly (string What, Action<string> Do, string Said, int Code)[] Damages =
     [
-        ("its header is gone", path => Overwrite(path, 0, 100), "backup"),
-        ("all behind its first page is gone", path => Overwrite(path, PageBytes, (int)new FileInfo(path).Length - PageBytes), "backup"),
-        ("it is cut in half", path => Truncate(path, new FileInfo(path).Length / 2 / PageBytes * PageBytes), "backup"),
-        ("it is empty", path => Truncate(path, 0), "missing"),
-        ("it is deleted", File.Delete, "missing"),
-        ("it is another program's", MakeForeign, "another program"),
-        ("it is of a newer version", path => Execute(path, "PRAGMA user_version=9999"), "newer"),
+        ("its header is gone", path => Overwrite(path, 0, 100), "backup", Damaged),
+        ("all behind its first page is gone", path => Overwrite(path, PageBytes, (int)new FileInfo(path).Length - PageBytes), "backup", Damaged),
+        ("it is cut in half", path => Truncate(path, new FileInfo(path).Length / 2 / PageBytes * PageBytes), "backup", Damaged),
+        ("it is empty", path => Truncate(path, 0), "missing", Damaged),
+        ("it is deleted", File.Delete, "missing", Damaged),
+        ("it is another program's", MakeForeign, "another program", Damaged),
+        ("it is of a newer version", path => Execute(path, "PRAGMA user_version=9999"), "newer", Configuration),
     ];
 
     public static IReadOnlyList<Scenario> All { get; } =
     [
         new("database-held", "D63 D64", "Another program holds the database while a sweep starts: 75 and a line; one that only reads for the whole sweep changes nothing.", Held),
-        new("database-damaged", "D65 D67 D69", "Header, pages or all of the database gone, another program's or a newer version's in its place: 65, what to do is said, the file stays as it is, and the backup put back goes on.", DamagedFile),
+        new("database-damaged", "D65 D67 D69", "Header, pages or all of the database gone, another program's or a newer version's in its place: 65, or 78 for the newer version, what to do is said, the file stays as it is, and the backup put back goes on.", DamagedFile),
         new("database-page", "D65", "A page of an index, then of a table is gone: verify names it.", DamagedPage),
         new("database-deleted", "D67", "The database is deleted under the running service: 74, no new one, 65 at the next start, and the backup put back goes on.", Deleted),
         new("log-deleted", "D66", "The write-ahead log of a killed run is deleted: what it held comes in again.", LogDeleted),
@@ -75,7 +76,7 @@ public static class Databases
             damage.Do(place.DatabasePath);
             var before = Content(place.DatabasePath);
             var ended = place.Sweep();
-            Trial.MustBe(Damaged, ended.Code, $"as the exit code ({ended.Said})");
+            Trial.MustBe(damage.Code, ended.Code, $"as the exit code ({ended.Said})");
             Trial.MustSay(ended.Errors, damage.Said);
             Trial.MustBe(0, before.SequenceEqual(Content(place.DatabasePath)) ? 0 : 1, "changes of the file");
             PutBack(done, place);

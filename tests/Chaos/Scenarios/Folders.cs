@@ -35,6 +35,18 @@ public static class Folders
         Disturb(trial, "made anew", () => Directory.Move(place.Inbox, place.At("old")), Drop, () => MustBeThere(place, room.Words));
         Disturb(trial, "closed", () => Close(place.Inbox), () => MustBeAway(place, WithoutOverride), () => Open(place.Inbox), Drop, () => MustBeThere(place, WithoutOverride));
         Disturb(trial, "a file closed", Drop, () => Close(dropped), () => Trial.MustSay(place.StartUnder(WithoutOverride, place.SweepWords).WaitForEnd().Errors, "no right to read it"), () => Open(dropped), () => MustBeThere(place, WithoutOverride));
+        foreach (var mode in new[] { "000", "400", "100" })
+        {
+            Disturb(
+                trial,
+                $"a person's folder with the mode {mode}",
+                Drop,
+                () => Tool.Run("chmod", mode, Path.Combine(place.Inbox, "anna")),
+                () => Trial.MustSay(place.StartUnder(WithoutOverride, place.SweepWords).WaitForEnd().Errors, "anna/: there is no right to look into this folder"),
+                () => Open(Path.Combine(place.Inbox, "anna")),
+                () => MustBeThere(place, WithoutOverride));
+        }
+
         Directory.Delete(place.At("old"), recursive: true);
         Trial.Sound(place, nights.Truth);
     }

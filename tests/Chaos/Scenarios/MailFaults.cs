@@ -11,6 +11,8 @@ public static class MailFaults
 {
     private const int ShortDeadline = 10;
 
+    private static readonly string[] Laters = ["421 4.3.2 closing", "450 4.2.1 greylisted", "451 4.3.0 local trouble", "452 4.3.1 full"];
+
     private static readonly Duration SixDays = Duration.FromDays(6);
 
     public static IReadOnlyList<Scenario> All { get; } =
@@ -33,7 +35,7 @@ public static class MailFaults
     }
 
     /// <summary>Under the fault nothing is taken; with the server well again everything comes, once.</summary>
-    private static void Recovers(Trial trial, MailDesk desk, SmtpScript fault, Action<Place>? mend = null)
+    private static void Recovers(Trial trial, MailDesk desk, SmtpScript fault, Action<Place>? mend = null, int mails = 1)
     {
         desk.Server.Script = fault;
         using var place = desk.Night();
@@ -41,14 +43,17 @@ public static class MailFaults
         desk.MustHaveTaken(0);
         mend?.Invoke(place);
         desk.MustSendTheRest(place, furtherCopies: 0);
-        trial.Survived();
+        for (var mail = 0; mail < mails; mail++)
+        {
+            trial.Survived();
+        }
     }
 
     private static void Cuts(Trial trial)
     {
         var random = new Random(trial.Seed);
-        using var desk = MailDesk.Open(trial, contacts: 25);
-        for (var turn = 0; turn < (trial.IsLong ? 800 : 20); turn++)
+        using var desk = MailDesk.Open(trial, contacts: 50);
+        for (var turn = 0; turn < (trial.IsLong ? 400 : 10); turn++)
         {
             var cuts = 0;
             desk.Server.Script = new SmtpScript { ToMessage = _ => random.Next(10) > 0 ? null : Count(ref cuts) };
@@ -90,14 +95,11 @@ public static class MailFaults
 
     private static void Later(Trial trial)
     {
-        using var one = MailDesk.Open(trial);
-        foreach (var answer in new[] { "421 4.3.2 closing", "450 4.2.1 greylisted", "451 4.3.0 local trouble", "452 4.3.1 full" })
-        {
-            Recovers(trial, one, new SmtpScript { ToSender = _ => answer });
-            Recovers(trial, one, new SmtpScript { ToRecipient = _ => answer });
-            Recovers(trial, one, new SmtpScript { ToMessage = _ => answer });
-        }
-
+        // A recipient each: one sweep meets all of them.
+        using var each = MailDesk.Open(trial, contacts: Laters.Length);
+        Recovers(trial, each, new SmtpScript { ToSender = number => Laters[number % Laters.Length] }, mails: Laters.Length);
+        Recovers(trial, each, new SmtpScript { ToRecipient = address => Laters[Enumerable.Range(0, Laters.Length).First(contact => PlaceOptions.Address(contact) == address)] }, mails: Laters.Length);
+        Recovers(trial, each, new SmtpScript { ToMessage = number => Laters[number % Laters.Length] }, mails: Laters.Length);
         using var desk = MailDesk.Open(trial, contacts: 25);
         desk.Server.Script = new SmtpScript { ToMessage = number => number > 10 ? "450 4.7.1 not more than ten" : null };
         using var place = desk.Night();

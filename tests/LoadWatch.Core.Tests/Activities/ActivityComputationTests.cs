@@ -42,13 +42,13 @@ public class ActivityComputationTests
 
         var values = Compute(Given.Recording("cycling", series));
 
-        Assert.Equal(0.11, values.UsableShare[Channel.HeartRate], 1e-9);
+        Assert.Equal(0.12, values.UsableShare[Channel.HeartRate], 1e-9);
         Assert.Empty(values.Histograms);
         Assert.Empty(values.TimesInZone);
         Assert.Empty(values.Quantities);
         Assert.Null(values.HeartRateMeanBpm);
         Assert.Equal("none", Assert.Single(values.Stimulus).Channel);
-        Assert.Equal("heart rate usable in 11 % of the time: no load, zone or stimulus from heart rate", Assert.Single(values.Remarks));
+        Assert.Equal("heart rate usable in 12 % of the time: no load, zone or stimulus from heart rate", Assert.Single(values.Remarks));
     }
 
     [Fact]

@@ -1,5 +1,6 @@
 using LoadWatch.Loads;
 using LoadWatch.People;
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Activities;
@@ -54,11 +55,13 @@ public class HistogramRenewalTests
         var old = new ActivityValues
         {
             Histograms = new Dictionary<Channel, Histogram> { [Channel.HeartRate] = Given.Histogram((150, 10)) },
+            Cuts = [new Cut(null, CutReason.Gap, new Stretch(1, 2), 0, 1, 0.5)],
             Remarks = ["power usable in 12 % of the time: no load, zone or stimulus from power", "no heart_rate_rest: no load by heart-rate reserve"],
         };
 
         var renewed = HistogramRenewal.Of(old, new Sport("cycling"), Given.Date, Given.Person(), AnchorBook.Empty, new ComputationSettings());
 
+        Assert.Equal(old.Cuts, renewed.Cuts);
         Assert.Equal([old.Remarks[0], HeartRateReserve.EveryMissing[0]], renewed.Remarks);
     }
 

@@ -8,11 +8,19 @@ public class UsableSamplesTests
     private const double None = double.NaN;
 
     [Fact]
-    public void AReadingStandsForTheTimeToTheNextUsableOneAtMostTenSeconds()
+    public void AReadingStandsForTheTimeToTheNextOneAtMostTenSeconds()
     {
         var channel = Of(Channel.Power, (0, 100), (1, None), (3, 120), (60, 130));
 
         Assert.Equal([(100.0, 3000), (120.0, 10_000), (130.0, 0)], channel.Samples.Select(sample => (sample.Value, sample.Milliseconds)));
+    }
+
+    [Fact]
+    public void AReadingNeverStandsForOneThatWasCut()
+    {
+        var channel = Of(Channel.HeartRate, (0, 100), (1, 0), (3, 102), (4, None), (5, 104));
+
+        Assert.Equal([(100.0, 1000), (102.0, 2000), (104.0, 0)], channel.Samples.Select(sample => (sample.Value, sample.Milliseconds)));
     }
 
     [Fact]
@@ -57,13 +65,12 @@ public class UsableSamplesTests
     public void NobodyIsFasterOnFootThanAPositionJumps(string sport, double metresPerSecond, bool usable) =>
         Assert.Equal(usable, ChannelLimits.Usable(Channel.Speed, metresPerSecond, new Sport(sport)));
 
-    /// <summary>By hand: usable from 0 to 4 s of 10 s.</summary>
+    /// <summary>By hand: usable from 0 to 4 s of 10 s; one good reading of ten is a tenth of the time.</summary>
     [Fact]
     public void TheShareIsUsableTimeOverSampledTime()
     {
-        var rows = new[] { (0, 120.0), (4, 120.0), (10, 0.0) };
-
-        Assert.Equal(0.4, Of(Channel.HeartRate, rows).Share, 1e-12);
+        Assert.Equal(0.4, Of(Channel.HeartRate, (0, 120.0), (4, 0.0), (10, 120.0)).Share, 1e-12);
+        Assert.Equal(0.1, Of(Channel.HeartRate, [.. Enumerable.Range(0, 101).Select(second => (second, second % 10 == 0 ? 120.0 : 0))]).Share, 1e-12);
         Assert.Equal(0, Of(Channel.HeartRate, (0, 0.0), (1, 254.0)).Share);
         Assert.Equal(1, Of(Channel.HeartRate, (0, 120.0)).Share);
     }

@@ -192,6 +192,13 @@ public class AlertReviewTests
     }
 
     [Fact]
+    public void ANoteRaisesNothingAndKeepsNothingStanding()
+    {
+        Assert.Empty(Review(6, [], Find(Load, 6, severity: Severity.Note)).Alerts);
+        Assert.Equal(AlertState.Returned, Assert.Single(Review(6, [Alert(AlertState.Unacknowledged)], Find(Legs, 6, severity: Severity.Note)).Alerts).State);
+    }
+
+    [Fact]
     public void AnAlertJudgedOnALaterDateIsLeftAlone()
     {
         var result = Review(4, [Alert(AlertState.Unacknowledged)]);

@@ -24,6 +24,17 @@ public sealed class BriefBuilderTests
     }
 
     [Fact]
+    public void AChangedReferenceValueIsToldAndFlagsNobody()
+    {
+        var note = new Finding("a", Today, "load_ratio", null, Severity.Note, Today, 1.95, 1.8, "ratio", "Load is high. Reference value changed.", new Evidence("a / b", "a choice", []));
+        var brief = Build(Subject("a", "Ann") with { Notes = [note] });
+
+        Assert.Equal("All quiet: 1 person, nothing to act on.", brief.FirstLine);
+        Assert.Equal([new BriefLine("Ann", "Load is high. Reference value changed.")], brief.Changed);
+        Assert.Contains("REFERENCE VALUE CHANGED\n- Ann: Load is high. Reference value changed.\n", BriefText.Write(brief), StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void WhatIsShelvedIsNeitherFlaggedNorCountedAndItsRowSaysUntilWhen()
     {
         var shelved = Silence("c") with { Alert = Silence("c").Alert with { ShelvedUntil = new LocalDate(2026, 3, 3) } };

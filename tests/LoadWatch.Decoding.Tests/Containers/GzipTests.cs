@@ -126,6 +126,56 @@ public class GzipTests
     public void UpToAMegabyteMayShrinkAnyFar() => Assert.Equal(1 << 20, Only(Packed.Gzip(new byte[1 << 20]), "x").Bytes.Length);
 
     [Fact]
+    public void TheRatioIsThatOfTheWholeFile()
+    {
+        // Each member alone is small enough to shrink any far.
+        var member = Packed.Gzip(new byte[1 << 20]);
+        byte[] bomb = [.. Enumerable.Repeat(member, 16).SelectMany(bytes => bytes)];
+
+        Assert.Equal("unpacks to more than 200 times its size", Assert.Single(Decoders.Unpack(bomb, "x").Problems).Reason);
+        Assert.Equal(Completeness.NeedsSettling, Decoders.CheckCompleteness(bomb));
+    }
+
+    [Fact]
+    public void SeveralMembersTakeNoMoreMemoryThanTheyHold()
+    {
+        // The last trailer tells only of the last member.
+        var large = new byte[3_000_000];
+        new Random(7).NextBytes(large);
+        byte[] bytes = [.. Packed.Gzip(large), .. Packed.Gzip(large), .. Packed.Gzip("end"u8.ToArray())];
+        var before = GC.GetAllocatedBytesForCurrentThread();
+
+        var content = Only(bytes, "x").Bytes;
+
+        Assert.InRange(GC.GetAllocatedBytesForCurrentThread() - before, 6_000_000, 6_300_000);
+        Assert.Equal([.. large, .. large, .. "end"u8], content.ToArray());
+    }
+
+    [Fact]
+    public void WhetherItIsWholeIsToldWithoutKeepingTheContent()
+    {
+        var bytes = Packed.Gzip(new byte[1 << 20]);
+        var before = GC.GetAllocatedBytesForCurrentThread();
+
+        Assert.Equal(Completeness.Complete, Decoders.CheckCompleteness(bytes));
+
+        Assert.InRange(GC.GetAllocatedBytesForCurrentThread() - before, 0, 200_000);
+    }
+
+    [Theory]
+    [InlineData(1, false)]
+    [InlineData(3, true)]
+    public void AContentMayBeAsLargeAsAFile(int largestMegabytes, bool isRead)
+    {
+        var content = new byte[2 << 20];
+        new Random(7).NextBytes(content);
+        var decoders = new DecoderSet([], ContainerLimits.For((long)largestMegabytes << 20));
+
+        Assert.Equal(isRead, decoders.Unpack(Packed.Gzip(content), "x").Problems.Count == 0);
+        Assert.Equal(isRead, Assert.Single(decoders.Unpack(Packed.Zip(("x", content)), "x").Members).Problem is null);
+    }
+
+    [Fact]
     public void AContentBeyondTheLimitOfAFileIsRefused()
     {
         var decoders = new DecoderSet([], new ContainerLimits { MemberBytes = 1000 });

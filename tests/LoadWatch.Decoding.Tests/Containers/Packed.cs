@@ -28,10 +28,15 @@ internal static class Packed
 
     public static byte[] Zip(params (string Name, byte[] Content)[] members) => Zip(CompressionLevel.Optimal, members);
 
-    public static byte[] Zip(CompressionLevel level, params (string Name, byte[] Content)[] members)
+    public static byte[] Zip(CompressionLevel level, params (string Name, byte[] Content)[] members) => Zip(level, names: null, members);
+
+    /// <param name="level">How the members are packed.</param>
+    /// <param name="names">The encoding of names; only UTF-8 is stated in the file. Null: UTF-8 where a name is not ASCII.</param>
+    /// <param name="members">In order.</param>
+    public static byte[] Zip(CompressionLevel level, Encoding? names, params (string Name, byte[] Content)[] members)
     {
         var stream = new MemoryStream();
-        using (var zip = new ZipArchive(stream, ZipArchiveMode.Create, leaveOpen: true))
+        using (var zip = new ZipArchive(stream, ZipArchiveMode.Create, leaveOpen: true, names))
         {
             foreach (var (name, content) in members)
             {
@@ -54,6 +59,17 @@ internal static class Packed
         }
 
         return changed;
+    }
+
+    /// <summary>Adds an extra field to the only entry of the directory.</summary>
+    public static byte[] WithExtra(byte[] zip, byte[] extra)
+    {
+        var directory = zip.AsSpan().IndexOf("PK\x1\x2"u8);
+        var end = zip.AsSpan().IndexOf("PK\x5\x6"u8);
+        byte[] longer = [.. zip[..end], .. extra, .. zip[end..]];
+        Write(longer, directory + 30, (uint)extra.Length, 2);
+        Write(longer, end + extra.Length + 12, (uint)(end + extra.Length - directory), 4);
+        return longer;
     }
 
     public static byte[] Flipped(byte[] bytes, int at)

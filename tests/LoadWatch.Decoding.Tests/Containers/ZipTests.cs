@@ -1,4 +1,5 @@
 using System.IO.Compression;
+using System.Text;
 using LoadWatch.Decoding.Containers;
 using LoadWatch.Recordings;
 
@@ -126,8 +127,70 @@ public class ZipTests
 
         var members = Decoders.Unpack(Packed.Zip([.. names.Select(name => (name, Other))]), "x").Members.ToList();
 
-        Assert.Equal(names.Select(name => name.Replace('\n', '\uFFFD').Replace('\0', '\uFFFD')), members.Select(member => member.Name));
+        Assert.Equal(
+            names.Select(name => name.Replace('\n', '\uFFFD').Replace('\0', '\uFFFD').Replace('\\', '/')), members.Select(member => member.Name));
         Assert.All(members, member => Assert.Equal(Other, member.Bytes.ToArray()));
+    }
+
+    [Theory]
+    [InlineData(437)]
+    [InlineData(850)]
+    [InlineData(65001)]
+    public void NamesWithoutAStatedEncodingKeepTheirLetters(int codePage)
+    {
+        // Both old code pages write these letters alike.
+        var written = CodePagesEncodingProvider.Instance.GetEncoding(codePage) ?? Encoding.UTF8;
+        var zip = Packed.Zip(CompressionLevel.Optimal, written, ("Jörg Müller/Übung.csv", Other));
+        var unstated = Packed.WithField(zip, 8, 6, 0, 2);
+
+        Assert.Equal("Jörg Müller/Übung.csv", Assert.Single(Decoders.Unpack(unstated, "x").Members).Name);
+    }
+
+    [Theory]
+    [InlineData(0, "Åsa Šimek/x.csv")]
+    [InlineData(1, "?sa ?imek/x.csv")]
+    public void ANameInUtf8BesideTheOldOneCountsWhereItIsStatedToBeOfTheSameEntry(uint wrongBy, string expected)
+    {
+        var old = "?sa ?imek/x.csv"u8.ToArray();
+        var path = Encoding.UTF8.GetBytes("Åsa Šimek/x.csv");
+        // The platform writes the CRC-32 of what it packs into the trailer. Another field before it, then: id, length, version 1, CRC-32 of the name as the directory has it, the name.
+        byte[] extra =
+        [
+            0x55, 0x54, 1, 0, 0, 0x75, 0x70, (byte)(path.Length + 5), 0, 1, .. BitConverter.GetBytes(BitConverter.ToUInt32(Packed.Gzip(old).AsSpan()[^8..]) + wrongBy), .. path,
+        ];
+
+        var zip = Packed.WithExtra(Packed.Zip((Encoding.ASCII.GetString(old), Other)), extra);
+
+        Assert.Equal(expected, Assert.Single(Decoders.Unpack(zip, "x").Members).Name);
+    }
+
+    [Fact]
+    public void ACutExtraFieldLeavesTheNameAlone()
+    {
+        var zip = Packed.WithExtra(Packed.Zip(("a.csv", Other)), [0x75, 0x70, 200, 0, 1]);
+
+        Assert.Equal("a.csv", Assert.Single(Decoders.Unpack(zip, "x").Members).Name);
+    }
+
+    [Fact]
+    public void OldProgramsSeparateFoldersByBackslashes()
+    {
+        var zip = Packed.Zip(("anna\\", []), ("anna\\ride.csv", Other), ("anna\\.hidden\\ride.csv", Other));
+
+        Assert.Equal("anna/ride.csv", Assert.Single(Decoders.Unpack(zip, "x").Members).Name);
+    }
+
+    [Fact]
+    public void AMemberCanBeHadAlone()
+    {
+        var zip = Packed.Zip([.. Enumerable.Range(0, 40).Select(i => ($"{i}", new byte[1 << 20]))]);
+        var members = Decoders.Unpack(zip, "x").Members;
+        var before = GC.GetAllocatedBytesForCurrentThread();
+
+        Assert.Equal("39", members[39].Name);
+
+        Assert.InRange(GC.GetAllocatedBytesForCurrentThread() - before, 1 << 20, 3 << 20);
+        Assert.Equal(40, members.Count);
     }
 
     [Fact]

@@ -1,4 +1,5 @@
 using LoadWatch.Decoding.Csv;
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Tests.Csv;
@@ -15,6 +16,16 @@ public class CsvQualityTests
         Assert.Equal([1, None, None, 4], recording.Samples[Channel.Speed].ToArray());
         Assert.Equal([10, None, None, 40], recording.Samples[Channel.Distance].ToArray());
         Assert.Equal([101.0, 102, 103, 104], recording.Samples[Channel.HeartRate].ToArray());
+        Assert.Equal([null, CutReason.MarkedBad, CutReason.MarkedBad, null], recording.Samples[Channel.Speed].ToArray().Select(CutMark.ReasonOf));
+    }
+
+    [Fact]
+    public void WhereAllPositionsAreBadThatIsToldInsteadOfNothing()
+    {
+        var samples = CsvFiles.Only(Decode(new CsvQuality { Column = "satellites", AtLeast = 6 }, "1", "2")).Samples;
+
+        Assert.True(samples.Has(Channel.Speed));
+        Assert.False(samples.Has(Channel.Altitude));
     }
 
     [Theory]

@@ -30,6 +30,21 @@ public sealed class NoticeFileTests : IDisposable
             File.ReadAllLines(March));
     }
 
+    /// <summary>After a flush that failed the system takes the bytes for written: another flush alone would say yes to what is not on the disk.</summary>
+    [Fact]
+    public void ANoticeThatIsFoundWholeIsWrittenOnceMoreInItsPlace()
+    {
+        NoticeFile.Append(temporary.FullName, Notice(1));
+        NoticeFile.Append(temporary.FullName, Notice(2));
+        var (whole, before) = (File.ReadAllBytes(March), DateTime.UnixEpoch);
+        File.SetLastWriteTimeUtc(March, before);
+
+        NoticeFile.Append(temporary.FullName, Notice(1));
+
+        Assert.Equal(whole, File.ReadAllBytes(March));
+        Assert.NotEqual(before, File.GetLastWriteTimeUtc(March));
+    }
+
     [Fact]
     public void EveryMonthHasItsOwnFile()
     {

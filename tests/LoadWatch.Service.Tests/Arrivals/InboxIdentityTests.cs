@@ -19,22 +19,24 @@ public sealed class InboxIdentityTests : IDisposable
 
     /// <summary>What decides: was it looked into before, at this path; is it another folder now; is it hollow.</summary>
     [Theory]
-    [InlineData("leave", "8.1:1", true, true, true, true, false)]
-    [InlineData("leave", "8.1:2", true, true, true, true, true)]
-    [InlineData("leave", "8.1:2", false, true, true, true, true)]
-    [InlineData("leave", "8.1:2", false, false, true, true, false)]
-    [InlineData("leave", "8.1:2", false, true, false, true, false)]
-    [InlineData("leave", "8.1:2", true, false, true, true, true)]
-    [InlineData("leave", "8.1:2", true, true, false, false, false)]
-    [InlineData("move", "8.1:2", false, true, true, true, false)]
-    [InlineData("move", "8.1:2", true, true, true, true, true)]
-    public void ADoubtIsAFolderThatIsAnotherAndHollow(string take, string id, bool isEmpty, bool lacksFiles, bool filesAreKnown, bool heldEntries, bool doubted)
+    [InlineData("leave", "8.1:1", true, true, true, true, true, false)]
+    [InlineData("leave", "8.1:2", true, true, true, true, true, true)]
+    [InlineData("leave", "8.1:2", false, true, true, true, true, true)]
+    [InlineData("leave", "8.1:2", false, false, true, true, true, false)]
+    [InlineData("leave", "8.1:2", false, true, false, true, true, false)]
+    [InlineData("leave", "8.1:2", true, false, true, true, true, true)]
+    [InlineData("leave", "8.1:2", true, true, false, false, true, false)]
+    [InlineData("leave", "8.1:2", false, true, true, true, false, false)]
+    [InlineData("leave", "8.1:2", true, true, true, true, false, true)]
+    [InlineData("move", "8.1:2", false, true, true, true, true, false)]
+    [InlineData("move", "8.1:2", true, true, true, true, true, true)]
+    public void ADoubtIsAFolderThatIsAnotherAndHollow(string take, string id, bool isEmpty, bool lacksFiles, bool filesAreKnown, bool heldEntries, bool heldFiles, bool doubted)
     {
         var inbox = new Inbox("main", "/srv/inbox", Enum.Parse<TakeMode>(take, ignoreCase: true));
-        var reason = InboxDoubt.Of(inbox, new InboxRoot("/srv/inbox", "8.1:1", heldEntries), id, isEmpty, () => lacksFiles, filesAreKnown);
+        var reason = InboxDoubt.Of(inbox, new InboxRoot("/srv/inbox", "8.1:1", heldEntries, heldFiles), id, isEmpty, () => lacksFiles, filesAreKnown);
         Assert.Equal(doubted, reason is not null);
         Assert.Null(InboxDoubt.Of(inbox, null, id, isEmpty, () => lacksFiles, filesAreKnown));
-        Assert.Null(InboxDoubt.Of(inbox, new InboxRoot("/srv/other", "8.1:1", heldEntries), id, isEmpty, () => lacksFiles, filesAreKnown));
+        Assert.Null(InboxDoubt.Of(inbox, new InboxRoot("/srv/other", "8.1:1", heldEntries, heldFiles), id, isEmpty, () => lacksFiles, filesAreKnown));
     }
 
     [Fact]
@@ -100,6 +102,41 @@ public sealed class InboxIdentityTests : IDisposable
         folder.Sweep();
         File.Delete(ride);
         Assert.Empty(folder.Sweep().MissingInboxes);
+    }
+
+    /// <summary>A share that holds no file any more and is mounted anew: another device, the same folders of people.</summary>
+    [Fact]
+    public void AnInboxThatItsUsersEmptiedIsStillTheInboxOnAnotherDevice()
+    {
+        var ride = folder.Put("anna/ride.fit", Some.Fit(Some.Yesterday));
+        folder.Sweep();
+        File.Delete(ride);
+        folder.Sweep();
+        Unmount();
+        Directory.CreateDirectory(Path.Combine(folder.Inbox, "anna"));
+
+        var report = folder.Sweep();
+
+        Assert.Empty(report.MissingInboxes);
+        Assert.True(report.Looks[0].IsReplaced);
+    }
+
+    [Fact]
+    public void AFolderThatMayNotBeLookedIntoIsTold()
+    {
+        Assert.SkipWhen(OperatingSystem.IsWindows(), "Windows has access lists, no modes");
+        Assert.SkipWhen(Environment.IsPrivilegedProcess, "the superuser may look into everything");
+        var anna = Path.GetDirectoryName(folder.Put("anna/ride.fit", Some.Fit(Some.Yesterday)))!;
+        var mode = File.GetUnixFileMode(anna);
+        foreach (var closed in new[] { UnixFileMode.None, UnixFileMode.UserRead, UnixFileMode.UserExecute })
+        {
+            File.SetUnixFileMode(anna, closed);
+            Assert.Equal("anna/", Assert.Single(folder.Sweep().Unreadable).Subject);
+        }
+
+        File.SetUnixFileMode(anna, mode);
+        Assert.Empty(folder.Sweep().Unreadable);
+        Assert.Single(folder.Arrivals());
     }
 
     [Fact]

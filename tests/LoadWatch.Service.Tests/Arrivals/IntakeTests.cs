@@ -177,6 +177,21 @@ public sealed class IntakeTests : IDisposable
     }
 
     [Fact]
+    public void AFileInAContainerMayBeAsLargeAsAFileElsewhere()
+    {
+        // The settings say 1 MB.
+        var small = Some.Gzip(new byte[900_000]);
+        var large = Some.Gzip(new byte[1_100_000]);
+        folder.Put("anna/small.gz", small);
+        folder.Put("anna/large.gz", large);
+
+        folder.Sweep();
+
+        Assert.Equal(ArrivalState.Aside, folder.Arrival(small)!.State);
+        Assert.Equal((ArrivalState.Refused, "byte 10: unpacks to more than 1048576 bytes"), (folder.Arrival(large)!.State, folder.Arrival(large)!.Reason));
+    }
+
+    [Fact]
     public void AnInboxThatGoesMissingIsReportedAndTheDaysGoOn()
     {
         folder.Put("anna/ride.fit", Some.Fit(Some.Yesterday));

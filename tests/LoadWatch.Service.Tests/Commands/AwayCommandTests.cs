@@ -38,7 +38,7 @@ public sealed class AwayCommandTests : IDisposable
         var expected = new Decision(kind, "anna", "anna", WorkingFolder.Now, "Kim", "told by phone") { From = Today, Until = until };
         Assert.Equal([expected], folder.Decisions());
         Assert.Equal([expected], other.Decisions().Select(decision => decision with { Via = null }));
-        Assert.Equal(Today, folder.Read((_, session) => Assert.Single(session.People.Dirty()).From));
+        Assert.Equal(Today, folder.Read((_, session) => Assert.Single(session.People.Behind(LocalDate.MinIsoValue)).DirtyFrom));
     }
 
     [Fact]

@@ -69,6 +69,26 @@ public sealed class ExitCodeTests : IDisposable
     }
 
     [Fact]
+    public void ADatabaseOfANewerVersionEndsWith78()
+    {
+        folder.Sweep();
+        using (var other = new Microsoft.Data.Sqlite.SqliteConnection($"Data Source={Path.Combine(folder.Data, "loadwatch.db")};Pooling=False"))
+        {
+            other.Open();
+            using var command = other.CreateCommand();
+            command.CommandText = "PRAGMA user_version=9999";
+            command.ExecuteNonQuery();
+        }
+
+        foreach (var word in new[] { "sweep", "status" })
+        {
+            var ended = Loadwatch.Run(word, "--config", folder.ConfigPath);
+            Assert.True(ended.Code == (word == "sweep" ? 78 : 2), ended.Errors + ended.Output);
+            Assert.Contains("newer LoadWatch (schema 9999", ended.Errors + ended.Output, StringComparison.Ordinal);
+        }
+    }
+
+    [Fact]
     public void AMissingDatabaseBesideOriginalsEndsWith65AndIsNotMadeAnew()
     {
         folder.Put("anna/ride.fit", Some.Fit(Some.Yesterday));

@@ -31,7 +31,7 @@ public sealed class ExportContractTests : IDisposable
     [InlineData(
         "activities",
         "person,date,start,sport,elapsed_s,timer_s,quantities,load_quantity,time_in_zone_s,heart_rate_mean_bpm,heart_rate_max_bpm,power_mean_w,power_max_w,"
-        + "usable_share,stimulus,recordings,tables,adds_load,remarks")]
+        + "usable_share,cuts,stimulus,recordings,tables,adds_load,remarks")]
     public void EveryRowOfATableHasTheseKeys(string table, string keys)
     {
         var rows = Rows(table);

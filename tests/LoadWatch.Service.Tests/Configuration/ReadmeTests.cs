@@ -9,6 +9,7 @@ using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
 using LoadWatch.Loads;
 using LoadWatch.People;
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
@@ -27,7 +28,7 @@ public sealed class ReadmeTests
     {
         get
         {
-            var data = new TheoryData<string, Type> { { "## Intake", typeof(IntakeEntry) } };
+            var data = new TheoryData<string, Type> { { "## Intake", typeof(IntakeEntry) }, { "**`quality`**", typeof(QualityLimits) } };
             foreach (var rule in typeof(RuleLimits).GetProperties().Where(property => property.Name != nameof(RuleLimits.Quantities)))
             {
                 data.Add($"**`{KeyOf(rule)}`**", rule.PropertyType);
@@ -84,7 +85,7 @@ public sealed class ReadmeTests
     {
         Type[] types =
         [
-            typeof(InboxEntry), typeof(GroupEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(CsvLayout), typeof(CsvQuality), typeof(CsvField),
+            typeof(InboxEntry), typeof(GroupEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(QualityLimits), typeof(CsvLayout), typeof(CsvQuality), typeof(CsvField),
             typeof(CsvWideEntry),
         ];
         var missing = types
@@ -121,7 +122,8 @@ public sealed class ReadmeTests
             .Concat(ValueCheck.WordsOf(typeof(NamesShown)))
             .Concat(ValueCheck.WordsOf(typeof(AnchorSource)))
             .Concat(ValueCheck.WordsOf(typeof(ArrivalState)))
-            .Concat(ValueCheck.WordsOf(typeof(TakeMode)));
+            .Concat(ValueCheck.WordsOf(typeof(TakeMode)))
+            .Concat(Enum.GetValues<CutReason>().Select(Words.Of));
 
         Assert.DoesNotContain(words, word => !IsNamed(word));
     }

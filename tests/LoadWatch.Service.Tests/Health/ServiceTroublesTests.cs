@@ -26,6 +26,8 @@ public sealed class ServiceTroublesTests
     {
         { "well", Well, null },
         { "inbox-main", Well with { Inboxes = [new InboxStatus("main", "2026-06-15T05:59:30Z", null, 0, "there is no such folder")] }, true },
+        { "inbox-main", Well with { Inboxes = [new InboxStatus("main", "2026-06-15T05:59:30Z", null, 0, "there is no such folder", "2026-06-15T05:50:01Z")] }, false },
+        { "inbox-main", Well with { Inboxes = [new InboxStatus("main", "2026-06-15T05:59:30Z", null, 0, "there is no such folder", "2026-06-15T05:50:00Z")] }, true },
         { "disk-scarce", Well with { DiskFreeBytes = (1024 * Megabyte) - 1 }, false },
         { "disk-scarce", Well with { DiskFreeBytes = 200 * Megabyte }, false },
         { "disk-full", Well with { DiskFreeBytes = (200 * Megabyte) - 1 }, true },
@@ -90,6 +92,45 @@ public sealed class ServiceTroublesTests
     [Fact]
     public void AServiceThatHasJustStartedIsWell() =>
         Assert.Equal(0, Judge(Well with { LastDone = null, Started = "2026-06-15T05:59:00Z" }, null).Code);
+
+    [Theory]
+    [InlineData("running", null, "2026-06-15T05:50:00Z", 1)]
+    [InlineData("running", null, "2026-06-15T05:49:59Z", 2)]
+    [InlineData("running", "2026-06-15T05:00:00Z", "2026-06-15T06:00:00Z", 2)]
+    [InlineData("failed", null, "2026-06-15T06:00:00Z", 2)]
+    public void AFirstSweepThatTakesLongAndGetsOnIsNoSilence(string result, string? failingSince, string lastCommit, int code)
+    {
+        var status = Well with
+        {
+            LastDone = null,
+            LastCommit = lastCommit,
+            Through = 700,
+            Waiting = 300,
+            Sweep = new SweepStatus("2026-06-15T00:00:00Z", null, result, null, failingSince),
+        };
+        var verdict = Judge(status, null);
+        Assert.Equal(code, verdict.Code);
+        Assert.Equal(code == 1, verdict.Sentence == "The first sweep has been under way since 2026-06-15T00:00:00Z and gets on: 700 arrivals are in, 300 wait.");
+        Assert.Equal(code, Judge(status with { LastDone = "2026-06-14T00:00:00Z" }, null).Code);
+    }
+
+    [Fact]
+    public void TheServiceRemembersSinceWhenAnInboxIsAway()
+    {
+        var inbox = new LoadWatch.Service.Configuration.Inbox("main", "/srv/inbox", LoadWatch.Service.Configuration.TakeMode.Leave);
+        var away = new LoadWatch.Service.Pipeline.SweepReport();
+        away.Take([LoadWatch.Service.Arrivals.InboxLook.NotAvailable(inbox, "there is no such folder")]);
+        var service = new ServiceRecord(Now);
+        service.Ended(Now, away, fault: null);
+        service.Ended(Now + Duration.FromMinutes(5), away, fault: null);
+        Assert.Equal("2026-06-15T06:00:00Z", service.In(Well).Inboxes[0].AwaySince);
+        service.Ended(Now + Duration.FromMinutes(6), new LoadWatch.Service.Pipeline.SweepReport(), fault: null);
+        service.Ended(Now + Duration.FromMinutes(7), away, fault: null);
+        Assert.Equal("2026-06-15T06:07:00Z", service.In(Well).Inboxes[0].AwaySince);
+        var command = new ServiceRecord(started: null);
+        command.Ended(Now, away, fault: null);
+        Assert.Null(command.In(Well).Inboxes[0].AwaySince);
+    }
 
     [Theory]
     [InlineData(false, 1, "WARNING")]

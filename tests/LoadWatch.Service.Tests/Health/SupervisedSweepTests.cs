@@ -145,6 +145,9 @@ public sealed class SupervisedSweepTests : IDisposable, IHostApplicationLifetime
         Run();
         Run();
         Assert.Equal([1901], logged);
+        Assert.Equal(("inbox-inbox", false), (Status.Troubles[0].Name, Status.Troubles[0].Critical));
+        clock.Pass(600);
+        Run();
         Assert.Equal(("inbox-inbox", true), (Status.Troubles[0].Name, Status.Troubles[0].Critical));
         Directory.Move(folder.Inbox + " away", folder.Inbox);
         Run();

@@ -38,7 +38,7 @@ public sealed class AnswersTests : IDisposable
             Via = Decision.ViaRow(Scope, "Anna Ahola", $"2026-06-12 {word}"),
         };
         Assert.Equal([expected], folder.Decisions());
-        Assert.Equal(Today.PlusDays(-3), folder.Read((_, session) => Assert.Single(session.People.Dirty()).From));
+        Assert.Equal(Today.PlusDays(-3), folder.Read((_, session) => Assert.Single(session.People.Behind(LocalDate.MinIsoValue)).DirtyFrom));
     }
 
     [Fact]
@@ -73,7 +73,7 @@ public sealed class AnswersTests : IDisposable
         Assert.Equal((0, 1), Counts(folder.TakeUp()));
         Assert.Empty(folder.InForce());
         Assert.Equal([DecisionKind.Ill, DecisionKind.Withdraw], folder.Decisions().Select(decision => decision.Kind));
-        Assert.Equal(Today.PlusDays(-3), folder.Read((_, session) => session.People.Dirty()[0].From));
+        Assert.Equal(Today.PlusDays(-3), folder.Read((_, session) => session.People.Behind(LocalDate.MinIsoValue)[0].DirtyFrom));
         folder.PutRows(row);
         Assert.Equal((1, 0), Counts(folder.TakeUp()));
         Assert.Equal(DecisionKind.Ill, Assert.Single(folder.InForce()).Kind);

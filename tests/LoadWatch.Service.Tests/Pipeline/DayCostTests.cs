@@ -24,6 +24,21 @@ public sealed class DayCostTests
         Assert.True(ten <= one * 1.15, $"{one} rows after a year, {ten} after ten");
     }
 
+    /// <summary>The days and histograms of the look-back before the change, and nothing that grows.</summary>
+    [Theory]
+    [InlineData(20, 910)]
+    [InlineData(300, 1470)]
+    public void AfterAChangedReferenceValueItReadsTheSessionsOfItsLookBackToo(int daysAgo, int most)
+    {
+        var (two, four) = (RowsAfterAChange(2, daysAgo), RowsAfterAChange(4, daysAgo));
+
+        Assert.InRange(two, 1, most);
+        Assert.Equal(two, four);
+    }
+
+    [Fact]
+    public void LongAfterAChangeItIsForgotten() => Assert.InRange(RowsAfterAChange(3, daysAgo: 440), 1, MostRows);
+
     [Fact]
     public void WhoIsNotBehindCostsNothing()
     {
@@ -43,6 +58,24 @@ public sealed class DayCostTests
         Fill(workplace, years * 365, everyDay: true);
         StoredTraining.Update(workplace.Configuration, workplace.Store, Last);
         workplace.Store.Write(session => StoredTraining.Put(session, "anna", Last, 90));
+        return StoredTraining.Update(workplace.Configuration, workplace.Store, Last);
+    }
+
+    private static long RowsAfterAChange(int years, int daysAgo)
+    {
+        var anchors = $"{WorkingFolder.Anchors.TrimEnd()}\nanna,{Last.PlusDays(-daysAgo):uuuu-MM-dd},heart_rate_max,176,bpm,,\n";
+        using var folder = new WorkingFolder(anchors: anchors);
+        using var workplace = Workplace.OpenToWork(folder.ConfigPath);
+        var (person, book) = (workplace.Configuration.People["anna"], workplace.Configuration.Anchors);
+        workplace.Store.Write(session =>
+        {
+            foreach (var date in Enumerable.Range(1, years * 365).Select(day => Last.PlusDays(-day)))
+            {
+                StoredTraining.Put(session, person, book, date, 40 + date.Day);
+            }
+        });
+        StoredTraining.Update(workplace.Configuration, workplace.Store, Last);
+        workplace.Store.Write(session => StoredTraining.Put(session, person, book, Last, 90));
         return StoredTraining.Update(workplace.Configuration, workplace.Store, Last);
     }
 

@@ -30,13 +30,30 @@ public sealed class DaysFromAnyDateTests
     {
         var history = new RandomHistory(number);
         var last = RandomHistory.First.PlusDays(RandomHistory.Days - 1);
-        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last);
+        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes());
         foreach (var cut in Enumerable.Range(0, 6).Select(_ => history.Below(whole.Days.Count - 1)))
         {
             var stored = whole.Days.Take(cut + 1).Select(Stored).ToList();
             var again = Continue(history, stored, history.Sessions, last, last);
             Same(whole.Days.Skip(cut + 1), again.Days);
             Same(whole.Findings.Where(finding => finding.Date > stored[^1].Date), again.Findings);
+        }
+    }, iter: Histories);
+
+    /// <summary>A reference value of a later date changes nothing of an earlier one (I-5).</summary>
+    [Fact]
+    public void NightByNightTheyAreTheSameAsLookedAtLater() => Gen.UInt.Sample(number =>
+    {
+        var history = new RandomHistory(number);
+        var last = RandomHistory.First.PlusDays(RandomHistory.Days - 1);
+        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes());
+        foreach (var night in Enumerable.Range(0, 4).Select(_ => RandomHistory.First.PlusDays(30 + history.Below(RandomHistory.Days - 30))))
+        {
+            var known = PersonSeries.Of(
+                history.Person, history.Group, [.. history.Sessions.Where(session => session.Date <= night)], [.. history.Tests.Where(test => test.Date <= night)], history.Plan, night, history.Changes(night));
+            var settled = night.PlusDays(-LoadCalendar.SettledDaysBack);
+            Same(whole.Days.Where(day => day.Date <= settled), known.Days.Where(day => day.Date <= settled));
+            Same(whole.Findings.Where(finding => finding.Date <= settled), known.Findings.Where(finding => finding.Date <= settled));
         }
     }, iter: Histories);
 
@@ -47,12 +64,14 @@ public sealed class DaysFromAnyDateTests
         var last = RandomHistory.First.PlusDays(RandomHistory.Days - 1);
         var found = Enumerable.Range(0, 8)
             .Select(number => new RandomHistory((uint)number))
-            .SelectMany(history => PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last).Findings)
+            .SelectMany(history => PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes()).Findings)
             .ToList();
 
         Assert.Equal(RuleBook.All.Select(rule => rule.Name).Order(StringComparer.Ordinal), found.Select(finding => finding.Rule).Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal));
         Assert.Contains(found, finding => finding is { Rule: "load_ratio", Quantity: "distance" });
         Assert.Contains(found, finding => Period.DaysBetween(finding.Since, finding.Date) > LoadCalendar.LookBackDays);
+        Assert.Contains(found, finding => finding.Severity == Severity.Note);
+        Assert.Contains(found, finding => finding.Severity > Severity.Note && finding.Evidence.Inputs.Any(item => item.Name == "heart_rate_max_before"));
     }
 
     /// <summary>As a person's stretches are computed: each settled by the 7 days behind it.</summary>
@@ -61,7 +80,7 @@ public sealed class DaysFromAnyDateTests
     {
         var history = new RandomHistory(number);
         var last = RandomHistory.First.PlusDays(RandomHistory.Days - 1);
-        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last);
+        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes());
         var (days, findings) = (new List<Day>(), new List<Finding>());
         for (var to = whole.Days[0].Date.PlusDays(history.Below(40)); days.Count < whole.Days.Count; to = LocalDate.Min(last, to.PlusDays(1 + history.Below(300))))
         {
@@ -105,7 +124,7 @@ public sealed class DaysFromAnyDateTests
             findings.AddRange(part.Findings);
             if (history.Below(5) == 0 || through == RandomHistory.First.PlusDays(RandomHistory.Days - 1))
             {
-                var whole = PersonSeries.Of(history.Person, history.Group, sessions, history.Tests, history.Plan, through);
+                var whole = PersonSeries.Of(history.Person, history.Group, sessions, history.Tests, history.Plan, through, history.Changes());
                 Same(whole.Days, days);
                 Same(whole.Findings, findings);
             }
@@ -126,7 +145,10 @@ public sealed class DaysFromAnyDateTests
     /// <summary>With no more than what is read of the store for it.</summary>
     private static PersonSeries Continue(RandomHistory history, List<Day> stored, IReadOnlyList<JoinedActivity> sessions, LocalDate to, LocalDate through)
     {
-        var before = stored.TakeLast(LoadCalendar.LookBackDays).Select((day, at) => at == Math.Min(stored.Count, LoadCalendar.LookBackDays) - 1 ? day : day with { Carried = Carried.Nothing }).ToList();
+        var changes = history.Changes();
+        var next = stored.Count == 0 ? LocalDate.MaxIsoValue : stored[^1].Date.PlusDays(1);
+        var wanted = stored.Count == 0 ? next : changes.Periods.Reach(next) ?? next.PlusDays(-LoadCalendar.LookBackDays);
+        var before = stored.Where(day => day.Date >= wanted).Select(day => day.Date == next.PlusDays(-1) ? day : day with { Carried = Carried.Nothing }).ToList();
         var from = before.Count == 0 ? LocalDate.MinIsoValue : before[^1].Date.PlusDays(1);
         return PersonSeries.Continue(
             history.Person,
@@ -135,7 +157,8 @@ public sealed class DaysFromAnyDateTests
             [.. sessions.Where(session => session.Date >= from && session.Date <= through && session.Date <= to.PlusDays(LoadCalendar.SettledDaysBack))],
             [.. history.Tests.Where(test => test.Date >= from && test.Date <= to)],
             before.Count == 0 ? history.Plan : From(history.Plan, from),
-            to);
+            to,
+            changes);
     }
 
     private static PersonPlan From(PersonPlan plan, LocalDate from) => new()

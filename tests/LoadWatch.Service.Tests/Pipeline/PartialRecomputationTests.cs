@@ -162,7 +162,7 @@ public sealed class PartialRecomputationTests : IDisposable
         var before = Dump();
         Assert.NotEqual(0, Loadwatch.RunAndKillAt("decoded", "rebuild", "--config", folder.ConfigPath).Code);
         Assert.True(folder.Read((_, session) => session.Outdated.Count()) > 0);
-        Assert.True(folder.Sweep().Recomputed > 0);
+        Assert.True(folder.Sweep(probe: new DyingProbe("", deaths: 0)).Recomputed > 0);
         Assert.Equal(before, Dump());
         Assert.Equal(0, folder.Read((_, session) => session.Outdated.Count()));
     }

@@ -68,17 +68,4 @@ public sealed class PoisonTests : IDisposable
         Assert.All(folder.Arrivals(), arrival => Assert.Equal((ArrivalState.Stored, 0), (arrival.State, arrival.Attempts)));
         Assert.Equal(2, folder.Arrivals().Count);
     }
-
-    /// <summary>Says of one object that the child died of it, so many times when it was tried alone.</summary>
-    private sealed class DyingProbe(string sha, int deaths) : IDecodeProbe
-    {
-        public int Deaths { get; private set; }
-
-        public bool Survives(IReadOnlyList<string> paths, long bytes)
-        {
-            var dies = paths.Any(path => Path.GetFileName(path) == sha) && Deaths < deaths;
-            Deaths += dies && paths.Count == 1 ? 1 : 0;
-            return !dies;
-        }
-    }
 }

@@ -14,7 +14,7 @@ namespace LoadWatch.Service.Tests.Pipeline;
 
 /// <summary>
 /// Three years of an invented person by a number: stretches of steady, rising, fading and no training, two devices and a form, ratings without heart rate, sets,
-/// poor recordings; absences, phases, matches and expected sessions; function tests. The same number gives the same history.
+/// poor recordings; absences, phases, matches and expected sessions; function tests; reference values that change. The same number gives the same history.
 /// </summary>
 internal sealed class RandomHistory
 {
@@ -22,6 +22,7 @@ internal sealed class RandomHistory
 
     public static readonly LocalDate First = new(2023, 3, 6);
 
+    private readonly IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, Histogram>> histograms;
     private ulong state;
 
     public RandomHistory(uint number)
@@ -35,6 +36,8 @@ internal sealed class RandomHistory
         Sessions = [.. Stretches().SelectMany(DaysOf)];
         Plan = MakePlan();
         Tests = [.. Enumerable.Range(0, Below(30)).Select(_ => Test(First.PlusDays(Below(Days) - 20)))];
+        Anchors = RandomReferences.Anchors(Below, First, Days);
+        (Sessions, histograms) = RandomReferences.Computed(Sessions, Person, Anchors, Below);
     }
 
     public Person Person { get; }
@@ -46,6 +49,16 @@ internal sealed class RandomHistory
     public PersonPlan Plan { get; }
 
     public IReadOnlyList<DatedTest> Tests { get; }
+
+    public AnchorBook Anchors { get; }
+
+    /// <summary>As known with the reference values up to a date.</summary>
+    public ReferenceChanges Changes(LocalDate? through = null)
+    {
+        var known = new AnchorBook(Anchors.Of(Person.Id).Where(anchor => !(anchor.Date > through)));
+        var periods = ReferencePeriods.Of(Person, Group, known);
+        return new ReferenceChanges(periods, () => new RestatedSessions(Person, known, new ComputationSettings(), periods.Quantities, histograms));
+    }
 
     /// <summary>A whole number from 0 on, below a limit.</summary>
     public int Below(int limit)

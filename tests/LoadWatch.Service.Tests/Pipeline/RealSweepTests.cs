@@ -63,6 +63,35 @@ public sealed class RealSweepTests(RealSweep sweep) : IClassFixture<RealSweep>
         Assert.Equal(JsonValueKind.Null, activity.GetProperty("heart_rate_mean_bpm").ValueKind);
     }
 
+    /// <summary>Seen in the files: a strap that was never worn, one that found the heart late, a ride with two stops, a speed that came and went.</summary>
+    [Theory]
+    [InlineData("r001.fit", "heart_rate", "out_of_range", 1)]
+    [InlineData("r049.fit", "heart_rate", "out_of_range", 1)]
+    [InlineData("r033.fit", "heart_rate", "spike", 0.0016)]
+    [InlineData("r006.fit", null, "timer_stopped", 0.1175)]
+    [InlineData("r011.fit", "speed", "no_reading", 0.9362)]
+    public void WhatIsCutOfRealRecordingsIsTold(string name, string? channel, string reason, double share)
+    {
+        sweep.Arrival(name);
+        var cuts = Assert.Single(sweep.Activities(name)).GetProperty("cuts").EnumerateArray()
+            .Where(cut => cut.GetProperty("channel").GetString() == channel && cut.GetProperty("reason").GetString() == reason);
+        Assert.Equal(share, cuts.Sum(cut => cut.GetProperty("share").GetDouble()), 1e-4);
+    }
+
+    /// <summary>The stops told by the timer's own events are the difference of the totals that the device states, but for the second at either end.</summary>
+    [Theory]
+    [InlineData("r006.fit")]
+    [InlineData("r015.fit")]
+    [InlineData("r033.fit")]
+    [InlineData("r042.fit")]
+    public void TheTimeWithoutTimerIsTheDifferenceOfTheDevicesTotals(string name)
+    {
+        sweep.Arrival(name);
+        var activity = Assert.Single(sweep.Activities(name));
+        var stood = activity.GetProperty("cuts").EnumerateArray().Where(cut => cut.GetProperty("reason").GetString() == "timer_stopped").Sum(cut => cut.GetProperty("seconds").GetDouble());
+        Assert.Equal(activity.GetProperty("elapsed_s").GetDouble() - activity.GetProperty("timer_s").GetDouble(), stood, 0.1 * stood);
+    }
+
     [Fact]
     public void EveryOtherFileIsStoredWithEveryRecording()
     {

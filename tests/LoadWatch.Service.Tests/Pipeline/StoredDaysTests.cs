@@ -4,6 +4,7 @@ using LoadWatch.Plans;
 using LoadWatch.Recordings;
 using LoadWatch.Rows;
 using LoadWatch.Service.Commands;
+using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Decisions;
 using LoadWatch.Storage.Rows;
@@ -12,10 +13,20 @@ using NodaTime;
 
 namespace LoadWatch.Service.Tests.Pipeline;
 
-/// <summary>I-5 in the store: whatever comes in whatever order and portions, days, findings and questions end as if all had been there from the start.</summary>
+/// <summary>I-5 in the store: whatever comes in whatever order and portions, days, findings and questions end as if all had been there from the start; three times in them a reference value changes.</summary>
 public sealed class StoredDaysTests
 {
     private const int Days = 620;
+
+    private const string Anchors = """
+        person,date,anchor,value,unit,source,exercise
+        anna,,heart_rate_rest,50,bpm,,
+        anna,,heart_rate_max,190,bpm,,
+        anna,2025-01-20,heart_rate_max,178,bpm,,
+        anna,2025-03-10,heart_rate_rest,58,bpm,,
+        anna,2025-11-03,heart_rate_max,201,bpm,,
+
+        """;
 
     private static readonly LocalDate First = new(2024, 9, 2);
 
@@ -30,10 +41,10 @@ public sealed class StoredDaysTests
 
     private static string AtOnce(List<Change> changes)
     {
-        using var folder = new WorkingFolder();
+        using var folder = new WorkingFolder(anchors: Anchors);
         using (var workplace = Workplace.OpenToWork(folder.ConfigPath))
         {
-            workplace.Store.Write(session => changes.ForEach(change => change.Make(session)));
+            workplace.Store.Write(session => changes.ForEach(change => change.Make(session, workplace.Configuration)));
             StoredTraining.Update(workplace.Configuration, workplace.Store, First.PlusDays(Days));
         }
 
@@ -43,7 +54,7 @@ public sealed class StoredDaysTests
     /// <summary>Mostly as the dates pass, some much later; and some rows that are taken back again.</summary>
     private static string InPortions(RandomHistory history, List<Change> changes)
     {
-        using var folder = new WorkingFolder();
+        using var folder = new WorkingFolder(anchors: Anchors);
         using (var workplace = Workplace.OpenToWork(folder.ConfigPath))
         {
             var left = changes.OrderBy(change => change.Date.PlusDays(history.Below(8) == 0 ? history.Below(500) : 0)).ToList();
@@ -53,7 +64,7 @@ public sealed class StoredDaysTests
                 var portion = left.Take(1 + history.Below(90)).ToList();
                 left.RemoveRange(0, portion.Count);
                 var mistaken = Mistake(portion[^1].Date);
-                workplace.Store.Write(session => portion.ForEach(change => change.Make(session)));
+                workplace.Store.Write(session => portion.ForEach(change => change.Make(session, workplace.Configuration)));
                 workplace.Store.Write(session => PutRow(session, mistaken));
                 through = LocalDate.Min(First.PlusDays(Days - 1), LocalDate.Max(through, portion[^1].Date.PlusDays(history.Below(4))));
                 StoredTraining.Update(workplace.Configuration, workplace.Store, through);
@@ -76,7 +87,11 @@ public sealed class StoredDaysTests
             if (history.Below(rate) == 0)
             {
                 var load = size + history.Below(40);
-                changes.Add(new Change(First.PlusDays(day), (session, date) => StoredTraining.Put(session, "anna", date, load)));
+                var isStated = history.Below(9) == 0;
+                changes.Add(new Change(First.PlusDays(day), (session, date) => StoredTraining.Put(session, "anna", date, load))
+                {
+                    Computed = isStated ? null : (session, configuration, date) => StoredTraining.Put(session, configuration.People["anna"], configuration.Anchors, date, load),
+                });
             }
 
             if (history.Below(5) == 0)
@@ -169,6 +184,18 @@ public sealed class StoredDaysTests
 
     private sealed record Change(LocalDate Date, Action<StoreSession, LocalDate> Effect, string Name = "recording")
     {
-        public void Make(StoreSession session) => Effect(session, Date);
+        public Action<StoreSession, WorkingConfiguration, LocalDate>? Computed { get; init; }
+
+        public void Make(StoreSession session, WorkingConfiguration configuration)
+        {
+            if (Computed is { } computed)
+            {
+                computed(session, configuration, Date);
+            }
+            else
+            {
+                Effect(session, Date);
+            }
+        }
     }
 }

@@ -7,6 +7,7 @@ using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Files;
 using LoadWatch.Storage.Recordings;
+using LoadWatch.Tests;
 using NodaTime;
 
 namespace LoadWatch.Service.Tests.Pipeline;
@@ -40,18 +41,7 @@ internal sealed class WorkingFolder : IDisposable
 
         """;
 
-    public const string Anchors = """
-        person,date,anchor,value,unit,source,exercise
-        anna,,heart_rate_rest,50,bpm,,
-        anna,,heart_rate_max,190,bpm,,
-        bo,,heart_rate_rest,55,bpm,,
-        bo,,heart_rate_max,185,bpm,,
-        bo,,critical_power,250,W,,
-        bo,,w_prime,20000,J,,
-        bo,,power_max,1100,W,,
-        cara,,heart_rate_rest,60,bpm,,
-
-        """;
+    public const string Anchors = SquadAnchors.Text;
 
     public string Root => root.FullName;
 
@@ -200,7 +190,9 @@ internal sealed class WorkingFolder : IDisposable
         var folder = DataFolder.Open(configuration.DataFolder);
         using var alone = InstanceLock.Take(folder);
         using var store = Store.Open(folder);
-        return work(new Sweep(configuration, folder, store, now ?? Now, probe ?? new NoProbe()) { RecomputesFor = recomputesFor ?? TimeSpan.MaxValue });
+        var report = work(new Sweep(configuration, folder, store, now ?? Now, probe ?? new NoProbe()) { RecomputesFor = recomputesFor ?? TimeSpan.MaxValue });
+        store.Settle();
+        return report;
     }
 
     private sealed class NoProbe : IDecodeProbe

@@ -1,4 +1,5 @@
 using LoadWatch.Activities;
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 using LoadWatch.Storage.Activities;
 using Microsoft.Data.Sqlite;
@@ -38,6 +39,7 @@ public sealed class ActivityChecksumTests : StoreTest
     [InlineData("UPDATE activity SET power_mean_watts = 0")]
     [InlineData("UPDATE activity SET quantities = replace(quantities, '1', '9')")]
     [InlineData("UPDATE activity SET remarks = '[]'")]
+    [InlineData("UPDATE activity SET cuts = '[]'")]
     [InlineData("UPDATE activity SET date = '2026-03-09'")]
     [InlineData("UPDATE histogram SET bins = X'0401'")]
     [InlineData("DELETE FROM histogram")]
@@ -78,6 +80,7 @@ public sealed class ActivityChecksumTests : StoreTest
                 PowerMaxWatts = 0.1 + 0.2,
                 Histograms = new Dictionary<Channel, Histogram> { [Channel.HeartRate] = histogram, [Channel.Power] = histogram },
                 Quantities = [Some.Quantity("minutes", 61)],
+                Cuts = [new Cut(null, CutReason.Gap, new Stretch(1, 2), 0, 1, 0.5)],
                 Remarks = ["cut to the planned session"],
             },
         };

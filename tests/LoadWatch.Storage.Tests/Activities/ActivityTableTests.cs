@@ -1,5 +1,6 @@
 using LoadWatch.Activities;
 using LoadWatch.Loads;
+using LoadWatch.Quality;
 using LoadWatch.Recordings;
 using LoadWatch.Stimulus;
 using LoadWatch.Storage.Activities;
@@ -33,6 +34,7 @@ public sealed class ActivityTableTests : StoreTest
         Assert.Null(read.Values.PowerMeanWatts);
         Assert.Equal(0.1 + 0.2, read.Values.PowerMaxWatts);
         Assert.Equal(written.Values.UsableShare, read.Values.UsableShare);
+        Assert.Equal(written.Values.Cuts, read.Values.Cuts);
         Assert.Equal(written.Values.Remarks, read.Values.Remarks);
         Assert.Equal(written.Values.Quantities, read.Values.Quantities);
         Assert.Empty(read.Values.Histograms);
@@ -169,6 +171,11 @@ public sealed class ActivityTableTests : StoreTest
                     LargeSeconds: new Band(14, 15, 16.5),
                     NotSeen: ["maximal power"]),
                 new RegionStimulus(BodyRegion.Trunk, Grade.E, "heart_rate", null, null, null, null, null, null, []),
+            ],
+            Cuts =
+            [
+                new Cut(null, CutReason.Undated, Stretch.Always, 3, 0, 0.01),
+                new Cut(Channel.HeartRate, CutReason.LockedToCadence, new Stretch(1_773_133_200_000, 1_773_133_260_001), 61, 60_000, 1 / 3.0),
             ],
             Remarks = ["heart rate usable in 12 % of the time: no heart-rate load"],
         };

@@ -57,7 +57,7 @@ public sealed class ConfigurationTableTests(SharedFolder shared) : StoreTest(sha
             Assert.Empty(session.Activities.All());
             Assert.Empty(session.Days.OfPerson("anna"));
             Assert.Empty(session.Findings.OfPerson("anna"));
-            Assert.Empty(session.People.Dirty());
+            Assert.Empty(session.People.All());
             Assert.Null(session.Derived.ConfigHash());
             Assert.Single(session.Arrivals.All());
             Assert.Single(session.Alerts.All());

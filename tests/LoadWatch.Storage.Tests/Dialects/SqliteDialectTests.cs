@@ -48,7 +48,8 @@ public sealed class SqliteDialectTests : IDisposable
         new SqliteDialect(DatabasePath).Prepare();
         Run("PRAGMA user_version=99");
 
-        Assert.Throws<DatabaseRefusedException>(new SqliteDialect(DatabasePath).Prepare);
+        Assert.Throws<NewerDatabaseException>(new SqliteDialect(DatabasePath).Prepare);
+        Assert.Throws<NewerDatabaseException>(new SqliteDialect(DatabasePath).RefuseUnprepared);
     }
 
     [Fact]

@@ -49,6 +49,15 @@ public sealed class FindingTableTests(SharedFolder shared) : StoreTest(shared)
     }
 
     [Fact]
+    public void ANoteDoesNotHold()
+    {
+        Store.Write(session => session.Findings.Replace("anna", Some.Date, [Some.Finding(Some.Date) with { Severity = Severity.Note }]));
+
+        Assert.False(Store.Read(session => session.Findings.Held(Some.Finding(Some.Date).Key, Some.Date)));
+        Assert.Equal(Severity.Note, Assert.Single(Store.Read(session => session.Findings.OfPerson("anna"))).Severity);
+    }
+
+    [Fact]
     public void AFindingOfSomebodyElseIsRefused() =>
         Assert.Throws<ArgumentException>(() => Store.Write(session => session.Findings.Replace("bo", Some.Date, [Some.Finding(Some.Date)])));
 

@@ -128,6 +128,34 @@ public sealed class NoticeTableTests(SharedFolder shared) : StoreTest(shared)
     }
 
     [Fact]
+    public void MailThatIsTriedAndReachesNobodyDoesNotLeave()
+    {
+        var (coach, doctor) = (Some.Notice("coach", Some.Date) with { Decided = At(0) }, Some.Notice("doctor", Some.Date) with { Decided = At(0) });
+        Add(coach, Mail);
+        Add(doctor, Mail);
+        Assert.Null(MailTriedSince());
+        Store.Write(session => session.Notices.MarkTryAgain(coach.Key, Mail, "no route", At(0), At(1)));
+        Assert.Equal(At(0), MailTriedSince());
+    }
+
+    [Fact]
+    public void OneMailboxThatTakesNothingIsNoSignThatMailDoesNotLeave()
+    {
+        var (coach, doctor) = (Some.Notice("coach", Some.Date) with { Decided = At(0) }, Some.Notice("doctor", Some.Date) with { Decided = At(0) });
+        Add(coach, Mail);
+        Add(doctor, Mail);
+        Store.Write(session => session.Notices.MarkTryAgain(coach.Key, Mail, "mailbox full", At(0), At(1)));
+
+        Store.Write(session => session.Notices.MarkDelivered(doctor.Key, Mail));
+
+        Assert.Null(MailTriedSince());
+        var next = Some.Notice("doctor", Some.Date.PlusDays(1)) with { Decided = At(20) };
+        Add(next, Mail);
+        Store.Write(session => session.Notices.MarkTryAgain(next.Key, Mail, "no route", At(20), At(21)));
+        Assert.Equal(At(20), MailTriedSince());
+    }
+
+    [Fact]
     public void WhenANoticeWasDecidedAndWhomItFlaggedIsKept()
     {
         var notice = Some.Notice("coach", Some.Date) with { Decided = At(7), Flagged = "ann\nbob" };
@@ -156,6 +184,8 @@ public sealed class NoticeTableTests(SharedFolder shared) : StoreTest(shared)
         Assert.Throws<ArgumentException>(() => Add(Some.Notice("coach", Some.Date) with { Key = key }));
 
     private static Instant At(int minute) => Instant.FromUtc(2026, 3, 1, 5, 30) + Duration.FromMinutes(minute);
+
+    private Instant? MailTriedSince() => Store.Read(session => session.Notices.Backlog()).MailTriedSince;
 
     private List<Delivery> Due(Instant now) => [.. Store.Read(session => session.Notices.DueDeliveries(now)).Select(pending => pending.Delivery)];
 

@@ -1,4 +1,5 @@
 using LoadWatch.Storage.People;
+using NodaTime;
 
 namespace LoadWatch.Storage.Tests.People;
 
@@ -13,8 +14,8 @@ public sealed class PersonStateTableTests(SharedFolder shared) : StoreTest(share
         Mark("anna", 2);
 
         Assert.Equal(
-            [new DirtyPerson("anna", Some.Date.PlusDays(1)), new DirtyPerson("bo", Some.Date)],
-            Store.Read(session => session.People.Dirty()));
+            [("anna", Some.Date.PlusDays(1)), ("bo", Some.Date)],
+            Dirty());
     }
 
     [Fact]
@@ -25,10 +26,10 @@ public sealed class PersonStateTableTests(SharedFolder shared) : StoreTest(share
         Assert.Null(Store.Read(session => session.People.ComputedTo("anna")));
 
         Store.Write(session => session.People.Computed("anna", Some.Date.PlusDays(9), session.People.Behind(Some.Date)[0].Marks));
-        Assert.Empty(Store.Read(session => session.People.Dirty()));
+        Assert.Empty(Dirty());
 
         Mark("anna", 5);
-        Assert.Equal([new DirtyPerson("anna", Some.Date.PlusDays(5))], Store.Read(session => session.People.Dirty()));
+        Assert.Equal([("anna", Some.Date.PlusDays(5))], Dirty());
         Assert.Equal(Some.Date.PlusDays(9), Store.Read(session => session.People.ComputedTo("anna")));
     }
 
@@ -41,7 +42,7 @@ public sealed class PersonStateTableTests(SharedFolder shared) : StoreTest(share
 
         Store.Write(session => session.People.Computed("anna", Some.Date.PlusDays(9), marks));
 
-        Assert.Equal([new DirtyPerson("anna", Some.Date.PlusDays(5))], Store.Read(session => session.People.Dirty()));
+        Assert.Equal([("anna", Some.Date.PlusDays(5))], Dirty());
     }
 
     [Fact]
@@ -55,6 +56,9 @@ public sealed class PersonStateTableTests(SharedFolder shared) : StoreTest(share
             [new PersonBehind("anna", Some.Date.PlusDays(2), null, 1), new PersonBehind("bo", null, Some.Date.PlusDays(8), 0)],
             Store.Read(session => session.People.Behind(Some.Date.PlusDays(9))));
     }
+
+    private List<(string Person, LocalDate From)> Dirty() =>
+        [.. Store.Read(session => session.People.Behind(LocalDate.MinIsoValue)).Select(person => (person.Person, person.DirtyFrom!.Value))];
 
     private void Mark(string person, int offset) => Store.Write(session => session.People.MarkDirty(person, Some.Date.PlusDays(offset)));
 }

@@ -16,6 +16,20 @@ public sealed class ArrivalTableTests(SharedFolder shared) : StoreTest(shared)
     }
 
     [Fact]
+    public void EveryProblemOfAnArrivalIsKept()
+    {
+        Store.Write(session => session.Arrivals.AddWaiting(Some.Sha(1), null, Some.Sha(1), 4));
+        Assert.Empty(Store.Read(session => session.Arrivals.Problems(Some.Sha(1))));
+
+        Store.Write(session => session.Arrivals.Settle(Some.Sha(1), ArrivalState.Stored, "csv", "line 2: \"x\"", "anna", ["line 2: \"x\"", "line 3"]));
+        Assert.Equal(["line 2: \"x\"", "line 3"], Store.Read(session => session.Arrivals.Problems(Some.Sha(1))));
+
+        Store.Write(session => session.Arrivals.Settle(Some.Sha(1), ArrivalState.Stored, "csv", null, "anna"));
+        Assert.Empty(Store.Read(session => session.Arrivals.Problems(Some.Sha(1))));
+        Assert.Empty(Store.Read(session => session.Arrivals.Problems(Some.Sha(2))));
+    }
+
+    [Fact]
     public void ASecondAddOfAKnownArrivalDoesNothing()
     {
         Store.Write(session => session.Arrivals.AddWaiting(Some.Sha(1), null, Some.Sha(1), 4));

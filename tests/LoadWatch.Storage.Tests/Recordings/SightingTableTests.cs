@@ -13,10 +13,10 @@ public sealed class SightingTableTests(SharedFolder shared) : StoreTest(shared)
     {
         Store.Write(session => session.Sightings.Upsert("watches", "anna/ride.fit", Some.Sha(1), Some.Moment, Stamp));
 
-        var latest = Store.Read(session => session.Sightings.Latest("watches"));
-
-        Assert.Equal(new Sighting("watches", "anna/ride.fit", Some.Sha(1), Some.Moment, Stamp, Latest: true, Some.Moment), Assert.Single(latest).Value);
-        Assert.Empty(Store.Read(session => session.Sightings.Latest("pods")));
+        Assert.Equal(
+            new Sighting("watches", "anna/ride.fit", Some.Sha(1), Some.Moment, Stamp, Latest: true, Some.Moment),
+            Assert.Single(Store.Read(session => session.Sightings.Of(Some.Sha(1)))));
+        Assert.Equal((1, 0), Store.Read(session => (session.Sightings.CountLatest("watches"), session.Sightings.CountLatest("pods"))));
     }
 
     [Fact]
@@ -25,7 +25,8 @@ public sealed class SightingTableTests(SharedFolder shared) : StoreTest(shared)
         Store.Write(session => session.Sightings.Upsert("pods", "ratings.csv", Some.Sha(1), Some.Moment, Stamp));
         Store.Write(session => session.Sightings.Upsert("pods", "ratings.csv", Some.Sha(2), Some.Moment, Stamp));
 
-        Assert.Equal(Some.Sha(2), Store.Read(session => session.Sightings.Latest("pods"))["ratings.csv"].Sha);
+        Assert.Equal(1, Store.Read(session => session.Sightings.CountLatest("pods")));
+        Assert.True(Assert.Single(Store.Read(session => session.Sightings.Of(Some.Sha(2)))).Latest);
         Assert.False(Assert.Single(Store.Read(session => session.Sightings.Of(Some.Sha(1)))).Latest);
     }
 
@@ -43,7 +44,7 @@ public sealed class SightingTableTests(SharedFolder shared) : StoreTest(shared)
 
         Assert.Equal(
             new Sighting("pods", "ratings.csv", Some.Sha(1), Some.Moment, newStamp, Latest: true, later),
-            Store.Read(session => session.Sightings.Latest("pods"))["ratings.csv"]);
+            Assert.Single(Store.Read(session => session.Sightings.Of(Some.Sha(1)))));
     }
 
     [Fact]

@@ -80,19 +80,55 @@ public sealed class RowTableTests(SharedFolder shared) : StoreTest(shared)
     [Fact]
     public void VersionsAreTheNamesOfTableContentsInTheOrderTheyWereSeen()
     {
-        Store.Write(session =>
-        {
-            foreach (var (sha, night) in new[] { (Some.Sha(1), 0), (Some.Sha(2), 1), (Some.Sha(1), 2) })
-            {
-                session.Arrivals.AddWaiting(sha, null, sha, 10);
-                session.Sightings.Upsert("inbox", "form/ratings.csv", sha, Some.Moment + Duration.FromDays(night), new FileStamp(10, 1, "1"));
-                session.TableVersions.Note(sha, "ratings", namedByFolder: false);
-            }
-        });
+        See("form/ratings.csv", Some.Sha(1), night: 0);
+        See("form/ratings.csv", Some.Sha(2), night: 1);
+        See("form/ratings.csv", Some.Sha(1), night: 2);
 
-        Assert.Equal([Some.Sha(2), Some.Sha(1)], Store.Read(session => session.TableVersions.Seen()).Select(version => version.Sha));
-        Assert.All(Store.Read(session => session.TableVersions.Seen()), version => Assert.Equal("inbox/form/ratings.csv", version.Scope));
+        Assert.Equal([Some.Sha(2), Some.Sha(1)], Store.Read(session => session.TableVersions.Seen("inbox/form/ratings.csv")).Select(version => version.Sha));
+        Assert.Empty(Store.Read(session => session.TableVersions.Seen("inbox/form/")));
     }
+
+    [Fact]
+    public void ATableIsChangedUntilTheRowsOfItsVersionsAreIn()
+    {
+        See("ratings.csv", Some.Sha(1), night: 0);
+        See("squad/form/monday.csv", Some.Sha(2), night: 0, namedByFolder: true);
+        See("squad/form/tuesday.csv", Some.Sha(3), night: 1, namedByFolder: true);
+        See("top.csv", Some.Sha(4), night: 0, namedByFolder: true);
+        string[] tables = ["inbox/ratings.csv", "inbox/squad/form/|ratings", "inbox/|ratings"];
+        Assert.Equal(tables.Order(StringComparer.Ordinal), Changed());
+        Assert.Equal([Some.Sha(2), Some.Sha(3)], Store.Read(session => session.TableVersions.Seen(tables[1])).Select(version => version.Sha));
+
+        foreach (var table in tables)
+        {
+            Apply(table);
+        }
+
+        Assert.Empty(Changed());
+        See("ratings.csv", Some.Sha(5), night: 2);
+        Assert.Equal([tables[0]], Changed());
+        Apply(tables[0]);
+        Store.Write(session => session.TableVersions.Forget(Some.Sha(3)));
+        Assert.Equal([tables[1]], Changed());
+        Apply(tables[1]);
+        Store.Write(session => session.Arrivals.Settle(Some.Sha(4), ArrivalState.Stored, "table", null, "anna"));
+        Assert.Equal([tables[2]], Changed());
+        Apply(tables[2]);
+        Assert.Empty(Changed());
+        Store.Write(session => session.TableVersions.ReplayAll());
+        Assert.Equal(tables.Order(StringComparer.Ordinal), Changed());
+    }
+
+    private IReadOnlyList<string> Changed() => Store.Read(session => session.TableVersions.Changed());
+
+    private void Apply(string table) => Store.Write(session => session.TableVersions.SetApplied(table, session.TableVersions.Seen(table)));
+
+    private void See(string path, string sha, int night, bool namedByFolder = false) => Store.Write(session =>
+    {
+        session.Arrivals.AddWaiting(sha, null, sha, 10);
+        session.Sightings.Upsert("inbox", path, sha, Some.Moment + Duration.FromDays(night), new FileStamp(10, 1, "1"));
+        session.TableVersions.Note(sha, "ratings", namedByFolder);
+    });
 
     private static StoredRow Rating(string scope, double rating, int night) =>
         Row(scope, "anna", RowKind.Sessions, new SessionRow(null, null, null, null, 60, rating, [], null), night);

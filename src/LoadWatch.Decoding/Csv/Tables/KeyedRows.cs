@@ -9,6 +9,9 @@ namespace LoadWatch.Decoding.Csv.Tables;
 /// </summary>
 internal sealed class KeyedRows(TableKind kind)
 {
+    // More people than one table names; it only spares work.
+    private const int FoldedAtMost = 5_000;
+
     private readonly List<TableRow?> rows = [];
     private readonly Dictionary<(string Subject, string Key), Known> known = [];
     private readonly Dictionary<string, string> folded = new(StringComparer.Ordinal);
@@ -21,11 +24,13 @@ internal sealed class KeyedRows(TableKind kind)
     /// <returns>The contradicted line, and how many rows are lost by it; null where there is none.</returns>
     public (long Line, int Lost)? Add(TableRow row, RowKey key)
     {
-        var place = (Folded(row.Subject), key.Text);
+        // Where rows are counted the key of the first stands for all, so that it is not kept twice.
+        var first = key.IsCounted ? key.Counted(1) : key.Text;
+        var place = (Folded(row.Subject), first);
         if (!known.TryGetValue(place, out var before))
         {
             known[place] = new Known(rows.Count, row.Line, Times: 1);
-            Append(key.IsCounted ? row with { Key = key.Counted(1) } : row);
+            Append(row with { Key = first });
             return null;
         }
 
@@ -36,7 +41,7 @@ internal sealed class KeyedRows(TableKind kind)
             return null;
         }
 
-        return rows[before.Index] is { } first && kind.AreEqual(first.Content, row.Content) ? null : (before.Line, 1 + Drop(before.Index));
+        return rows[before.Index] is { } same && kind.AreEqual(same.Content, row.Content) ? null : (before.Line, 1 + Drop(before.Index));
     }
 
     private void Append(TableRow row)
@@ -59,7 +64,10 @@ internal sealed class KeyedRows(TableKind kind)
         if (!folded.TryGetValue(subject ?? "", out var upper))
         {
             upper = (subject ?? "").ToUpperInvariant();
-            folded[subject ?? ""] = upper;
+            if (folded.Count < FoldedAtMost)
+            {
+                folded[subject ?? ""] = upper;
+            }
         }
 
         return upper;

@@ -7,8 +7,12 @@ namespace LoadWatch.Decoding.Csv.Tables;
 /// <summary>Reads the rows of one table by one layout.</summary>
 internal sealed class TableReading
 {
-    // About 400 bytes a row with its key, measured: so many stay near the 192 MB that a file of 32 MB may take.
+    // About 450 bytes a row with its key, measured: so many stay near the 192 MB that a file of 32 MB may take.
     private const int RowsAtMost = 400_000;
+    private const int BytesOfRow = 450;
+    private const long BytesBeside = 40L << 20;
+    private const int TimesFile = 3;
+
     private const int BadRowsAllowed = 3;
     private const int BadPercentAllowed = 10;
 
@@ -20,6 +24,7 @@ internal sealed class TableReading
     private readonly IReadOnlyList<RowPlace> places;
     private readonly IReadOnlyList<FieldCell> shared;
     private readonly KeyedRows keyed;
+    private readonly long rowsAtMost;
     private readonly RowProblems problems = new();
     private readonly RowValues values = new();
     private readonly TextPool pool = new();
@@ -34,6 +39,9 @@ internal sealed class TableReading
         places = RowPlace.Of(table, layout, kind);
         shared = RowPlace.Shared(table, layout, kind);
         keyed = new KeyedRows(kind);
+
+        // Below rows of some hundred bytes it is memory that sets the limit: 150,000 rows of sixty bytes.
+        rowsAtMost = Math.Min(RowsAtMost, (BytesBeside + (TimesFile * table.Text.Source.Length)) / BytesOfRow);
     }
 
     public DecodedFile Read()
@@ -59,9 +67,9 @@ internal sealed class TableReading
         using var rows = table.Rows();
         while (rows.Next())
         {
-            if (keyed.Count >= RowsAtMost)
+            if (keyed.Count >= rowsAtMost)
             {
-                return RowShape.Refusal($"more than {RowsAtMost} rows", rows.Line);
+                return RowShape.Refusal($"more than {rowsAtMost} rows{(rowsAtMost < RowsAtMost ? ", the most of a file of its size" : "")}", rows.Line);
             }
 
             if (NamesAgain(rows) is { } again)

@@ -1,0 +1,93 @@
+using System.Diagnostics;
+using System.Globalization;
+using LoadWatch.Decoding.Csv;
+using LoadWatch.Decoding.Tests.Csv;
+using LoadWatch.Recordings;
+
+namespace LoadWatch.Decoding.Tests.Limits;
+
+/// <summary>
+/// Reads the worst files in a process whose heap ends at the ceiling (I-11): 64 MB and four times the file, the test runner's own part included.
+/// The two tests of the child do nothing unless they are started by the others.
+/// </summary>
+public class MemoryTests
+{
+    private const string InChild = "LOADWATCH_LIMITED";
+    private const long Ceiling = 64L << 20;
+
+    // LOADWATCH_LARGE_MB sets how large the file is that is read in flat memory.
+    private static readonly int LargeMegabytes = int.Parse(Environment.GetEnvironmentVariable("LOADWATCH_LARGE_MB") ?? "160", CultureInfo.InvariantCulture);
+
+    [Fact]
+    public void NoWorstFileTakesMoreThanItsCeiling() => RunLimited(nameof(EveryWorstFileIsRead), Ceiling + (4L * WorstInputs.Bytes));
+
+    [Fact]
+    public void ALargeFileIsReadInFlatMemory() => RunLimited(nameof(ALargeFileIsReadThrough), Ceiling);
+
+    [Fact]
+    public void EveryWorstFileIsRead()
+    {
+        Assert.SkipUnless(IsChild, "part of another test");
+        Assert.DoesNotContain(WorstInputs.All, worst => !IsReadWithin(worst.Make()));
+    }
+
+    [Fact]
+    public void ALargeFileIsReadThrough()
+    {
+        Assert.SkipUnless(IsChild, "part of another test");
+        const int people = 10;
+        var days = (int)(((long)LargeMegabytes << 20) / new SquadStream(people, 1).Length);
+        var layout = new CsvLayout
+        {
+            Name = "squad",
+            Header = ["player"],
+            PersonColumn = "player",
+            Time = new CsvTimeColumn { Column = "time" },
+            Columns = [new() { Column = "speed", Channel = Channel.Speed, Unit = "m/s" }, new() { Column = "heart rate", Channel = Channel.HeartRate, Unit = "bpm" }],
+        };
+        var (recordings, rows) = (0, 0L);
+
+        var read = CsvDecoder.Read(() => new SquadStream(people, days), [layout], recording =>
+        {
+            recordings++;
+            rows += recording.Samples.Count;
+        });
+
+        Assert.Empty(read.File.Problems);
+        Assert.Equal((people * days, (long)people * days * SquadStream.RowsOfSession), (recordings, rows));
+    }
+
+    private static bool IsReadWithin(byte[] bytes)
+    {
+        try
+        {
+            WorstInputs.Read(bytes);
+            return true;
+        }
+        catch (OutOfMemoryException)
+        {
+            return false;
+        }
+    }
+
+    private static bool IsChild => Environment.GetEnvironmentVariable(InChild) is not null;
+
+    private static void RunLimited(string test, long bytes)
+    {
+        var start = new ProcessStartInfo(Path.ChangeExtension(typeof(MemoryTests).Assembly.Location, OperatingSystem.IsWindows() ? ".exe" : null))
+        {
+            UseShellExecute = false,
+            RedirectStandardOutput = true,
+            RedirectStandardError = true,
+        };
+        start.ArgumentList.Add("-method");
+        start.ArgumentList.Add($"{typeof(MemoryTests).FullName}.{test}");
+        start.Environment[InChild] = "1";
+        start.Environment["DOTNET_GCHeapHardLimit"] = bytes.ToString("X", CultureInfo.InvariantCulture);
+        using var child = Process.Start(start)!;
+        var errors = child.StandardError.ReadToEndAsync();
+        var output = child.StandardOutput.ReadToEnd();
+        child.WaitForExit();
+        Assert.True(child.ExitCode == 0 && output.Contains("Failed: 0", StringComparison.Ordinal) && output.Contains("Skipped: 0", StringComparison.Ordinal), $"{errors.Result}\n{output}");
+    }
+}
