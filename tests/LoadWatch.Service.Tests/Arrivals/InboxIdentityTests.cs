@@ -122,6 +122,7 @@ public sealed class InboxIdentityTests : IDisposable
     }
 
     [Fact]
+    [System.Runtime.Versioning.UnsupportedOSPlatform("windows")]
     public void AFolderThatMayNotBeLookedIntoIsTold()
     {
         Assert.SkipWhen(OperatingSystem.IsWindows(), "Windows has access lists, no modes");
