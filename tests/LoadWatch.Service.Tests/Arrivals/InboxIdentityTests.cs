@@ -122,6 +122,7 @@ public sealed class InboxIdentityTests : IDisposable
     }
 
     [Fact]
+    [System.Runtime.Versioning.UnsupportedOSPlatform("windows")]
     public void AFolderThatMayNotBeLookedIntoIsTold()
     {
         Assert.SkipWhen(OperatingSystem.IsWindows() || Environment.IsPrivilegedProcess, "modes keep neither Windows nor the superuser out");
