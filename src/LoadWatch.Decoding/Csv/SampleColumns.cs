@@ -55,7 +55,7 @@ internal sealed class SampleColumns
 
     private static void Add(Dictionary<Channel, double[]> columns, Channel channel, double[] column)
     {
-        if (Array.Exists(column, value => !double.IsNaN(value)))
+        if (Array.Exists(column, CutMark.IsTaken))
         {
             columns[channel] = column;
         }
