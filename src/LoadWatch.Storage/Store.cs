@@ -7,8 +7,11 @@ namespace LoadWatch.Storage;
 /// <summary>The database: one writer at a time, readers beside it. Safe to use from several threads.</summary>
 public sealed class Store : IDisposable
 {
-    /// <summary>The log is emptied into the database when it has grown by so much. A choice: twice what the engine would do by itself.</summary>
-    internal const long LogMayGrowBytes = 8L * 1024 * 1024;
+    /// <summary>
+    /// The log is emptied into the database when it has grown by so much. A large import writes the same pages in commit after commit: the fewer times it is
+    /// emptied, the fewer of them go to the database twice.
+    /// </summary>
+    internal const long LogMayGrowBytes = 12L * 1024 * 1024;
 
     private readonly Dialect dialect;
     private readonly DatabaseFile file;

@@ -140,7 +140,7 @@ public sealed class DurabilityTests : IDisposable
     {
         using var store = Store.Open(folder);
         var (log, largest) = (new FileInfo(folder.DatabasePath + "-wal"), 0L);
-        for (var megabyte = 0; megabyte < 20; megabyte++)
+        for (var megabyte = 0; megabyte < 30; megabyte++)
         {
             store.Write(session => session.Audits.Add("taken_in", new string('x', 1024 * 1024), Some.Moment));
             log.Refresh();
@@ -158,7 +158,7 @@ public sealed class DurabilityTests : IDisposable
         store.Read(session =>
         {
             Assert.Empty(session.Audits.All());
-            for (var megabyte = 0; megabyte < 12; megabyte++)
+            for (var megabyte = 0; megabyte < 14; megabyte++)
             {
                 store.Write(writing => writing.Audits.Add("taken_in", new string('x', 1024 * 1024), Some.Moment));
             }
@@ -168,7 +168,7 @@ public sealed class DurabilityTests : IDisposable
 
         Assert.False(new FileInfo(folder.DatabasePath + "-wal").Length < Store.LogMayGrowBytes);
         Assert.True(store.Checkpoint());
-        Assert.Equal(12, store.Read(session => session.Audits.All()).Count);
+        Assert.Equal(14, store.Read(session => session.Audits.All()).Count);
     }
 
     [Fact]

@@ -6,7 +6,7 @@ namespace LoadWatch.Activities;
 /// <summary>
 /// Cuts a channel down to what can be used. Rows are sorted by time, rows of one time keep the order of the file, undated rows are left
 /// out.
-/// A reading stands for the time to the next one of its channel, at most 10 s and never for one that was cut or for a stopped timer; that of the last row stands for 0.
+/// A reading stands for the time to the next one of its channel, at most 10 s and never for one that was cut or for a stopped timer; the last stands as long as its row.
 /// </summary>
 public static class UsableSamples
 {

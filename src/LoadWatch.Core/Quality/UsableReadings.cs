@@ -4,8 +4,8 @@ using LoadWatch.Recordings;
 namespace LoadWatch.Quality;
 
 /// <summary>
-/// What is left of a channel. A reading, usable or cut, stands until the next one of either kind or the last row, at most 10 s and not while the timer stood: so
-/// a usable one bridges rows that have none, but never one that was cut, and usable, cut and missing time add up to the sampled time.
+/// What is left of a channel. A reading, usable or cut, stands until the next one of either kind, at most 10 s and not while the timer stood, the last
+/// as long as its row: so a usable one bridges rows that have none, but never one that was cut, and usable, cut and missing time add up to the sampled time.
 /// </summary>
 internal static class UsableReadings
 {
@@ -70,7 +70,7 @@ internal static class UsableReadings
         {
             if (timeline.Times.Length > 0)
             {
-                Settle(timeline.Times[^1], last < 0 ? 0 : Stands(timeline.Times[last], timeline.Times[^1]));
+                Settle(timeline.Times[^1], last < 0 ? 0 : timeline.Milliseconds[last]);
             }
 
             return new UsableChannel(channel, times, readings, milliseconds, kept, Share(usable, timeline, kept)) { Cuts = cuts.Of(timeline.TotalMilliseconds) };

@@ -88,7 +88,7 @@ public sealed class FitDecoder
     {
         if (offset == 0)
             problems.Add(new Problem(ProblemSeverity.Error, "not a FIT header", 0));
-        else if (problems.Count == 0)
+        else if (problems.TrueForAll(problem => problem.Severity == ProblemSeverity.Warning))
             problems.Add(new Problem(ProblemSeverity.Warning, $"{bytes.Length - offset} bytes behind the last whole part, no FIT header", offset));
     }
 

@@ -17,9 +17,6 @@ public sealed class SqliteDialect : Dialect
 
     private const int NotADatabase = 26;
 
-    // Pages of 4 KB (12 MB). A large import writes the same pages in commit after commit: the fewer times the log is emptied, the fewer of them go to the database twice.
-    private const int LogPages = 3000;
-
     // SQLITE_DBCONFIG_NO_CKPT_ON_CLOSE.
     private const int NoCheckpointOnClose = 1006;
     private const int IoErrorOnSync = 10 | (4 << 8);
@@ -86,7 +83,6 @@ public sealed class SqliteDialect : Dialect
     public override DbConnection OpenWriter()
     {
         var connection = Open("PRAGMA query_only=OFF");
-        connection.Execute(string.Create(CultureInfo.InvariantCulture, $"PRAGMA wal_autocheckpoint={LogPages}"));
         connection.Execute("PRAGMA cache_size=-16000");
         return connection;
     }

@@ -1,4 +1,4 @@
--- What of a session does not count, where and why; everything that is wrong with a file beside the first. What was computed before is computed again.
+-- What of a session does not count, where and why, and everything that is wrong with a file beside the first. What was computed before is computed again.
 ALTER TABLE activity ADD COLUMN cuts TEXT NOT NULL DEFAULT '[]'
 ;
 UPDATE activity SET checksum = NULL

@@ -126,6 +126,13 @@ public class FitDamageTests
     }
 
     [Fact]
+    public void BytesBehindTheLastPartAreNamedBesidesAnotherWarning()
+    {
+        var decoded = Parts.Decode(Beats(1), [1, 2, 3]);
+        Assert.Equal(["heart beats", "3 bytes beh"], decoded.Problems.Select(problem => problem.Reason[..11]));
+    }
+
+    [Fact]
     public void AWholePartBehindADamagedOneStands()
     {
         var damaged = Parts.Activity();

@@ -52,7 +52,7 @@ public sealed class ExplainCutsTests : IDisposable
     }
 
     [Fact]
-    public void EveryProblemOfAFileIsTold()
+    public void RowsOutOfOrderAreTold()
     {
         folder.Put("anna/run.csv", Some.Text("""
             time,heart_rate_bpm
@@ -64,11 +64,21 @@ public sealed class ExplainCutsTests : IDisposable
             """));
         folder.Sweep();
 
+        Assert.Contains("rows before the row above, 12:00:03 to 12:00:04: 50 % of the rows, 2 rows", Explain("anna/run.csv"), StringComparison.Ordinal);
+    }
+
+    /// <summary>Two bad rows of 301 are left out, each with its line; a bad hundredth would refuse the file.</summary>
+    [Fact]
+    public void EveryProblemOfAFileIsTold()
+    {
+        var rows = Enumerable.Range(0, 301).Select(second => $"2026-06-14T12:0{second / 60}:{second % 60:00}Z,{(second is 10 or 20 ? "x" : "130")}\n");
+        folder.Put("anna/run.csv", Some.Text("time,heart_rate_bpm\n" + string.Concat(rows)));
+        folder.Sweep();
+
         var told = Explain("anna/run.csv");
 
-        Assert.Contains("line 3, column 1 (time)", told, StringComparison.Ordinal);
-        Assert.Contains("line 5, column 1 (time)", told, StringComparison.Ordinal);
-        Assert.Contains("rows before the row above, 12:00:03 to 12:00:04: 50 % of the rows, 2 rows", told, StringComparison.Ordinal);
+        Assert.Contains("line 12, column 2 (heart_rate_bpm)", told, StringComparison.Ordinal);
+        Assert.Contains("line 22, column 2 (heart_rate_bpm)", told, StringComparison.Ordinal);
     }
 
     private string Explain(string subject) =>

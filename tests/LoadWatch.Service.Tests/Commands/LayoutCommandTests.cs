@@ -1,5 +1,6 @@
 using System.Text.Json;
 using LoadWatch.Service.Tests.Pipeline;
+using WorkingFolder = LoadWatch.Service.Tests.Pipeline.WorkingFolder;
 
 namespace LoadWatch.Service.Tests.Commands;
 
