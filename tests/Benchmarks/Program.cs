@@ -1,4 +1,5 @@
 using BenchmarkDotNet.Running;
+using LoadWatch.Benchmarks;
 using LoadWatch.Benchmarks.Imports;
 
 // dotnet run -c Release --project tests/Benchmarks -- --filter '*' --job short
