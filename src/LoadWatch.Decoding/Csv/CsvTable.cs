@@ -86,10 +86,13 @@ internal sealed record CsvTable(CsvText Text, char Separator, int RowsAbove, lon
         return (rows.CellCount, first.Length) switch
         {
             _ when !first.StartsWith("sep=", StringComparison.OrdinalIgnoreCase) => null,
-            (1, 5) when char.IsAscii(first[4]) => first[4],
+            (1, 5) when MaySeparate(first[4]) => first[4],
             (2, 4) when rows[1].IsEmpty => separator,
             (1, 4) => '\t',
             _ => null,
         };
     }
+
+    /// <summary>A letter or a quote between two cells would be a mistake.</summary>
+    private static bool MaySeparate(char c) => c == '\t' || (char.IsAscii(c) && c != '"' && (char.IsPunctuation(c) || char.IsSymbol(c)));
 }

@@ -79,6 +79,8 @@ public class CsvErrorTests
     [InlineData("", "line 1: the file is empty")]
     [InlineData("\n\n", "line 1: the file is empty")]
     [InlineData("sep=,\n", "line 2: no line of column names")]
+    [InlineData("sep=\"\nwhen,what\n", "line 1: no layout fits the column names found (sep=\"); layouts known: samples")]
+    [InlineData("sep=a\nwhen,what\n", "line 1: no layout fits the column names found (sep=a); layouts known: samples")]
     [InlineData("time,heart_rate_bpm\nx,1\ny,2\n", "none of 2 rows can be used")]
     [InlineData("time,heart_rate_bpm,time\n2026-10-05T06:00:00Z,1,\n", "line 1 (time): two columns have this name")]
     [InlineData("when,what\n1,2\n", "line 1: no layout fits the column names found (when, what); layouts known: samples")]
