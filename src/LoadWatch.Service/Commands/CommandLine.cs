@@ -91,15 +91,19 @@ public static class CommandLine
     {
         DbException database when StoreTroubles.Of(database) == StoreTrouble.Damaged => $"{database.Message}: {StoreTroubles.AdviceOfDamage}.",
         DbException database when StoreTroubles.Of(database) == StoreTrouble.Busy => "Another program holds the database: try again in a moment.",
+        _ when Within(e) is { } inner => Told(inner),
         _ => e.Message,
     };
+
+    /// <summary>What an exception only stands around: several tasks, or a part of the program that could not be loaded.</summary>
+    private static Exception? Within(Exception e) => e is AggregateException or TypeInitializationException ? e.InnerException : null;
 
     private static int? Expected(Exception e) => e switch
     {
         ConfigurationException or NewerDatabaseException => ExitCode.Configuration,
         InstanceRunningException => ExitCode.TryLater,
         DatabaseRefusedException or InvalidDataException => ExitCode.Data,
-        AggregateException { InnerException: { } inner } => Expected(inner),
+        _ when Within(e) is { } inner => Expected(inner),
         DurabilityLostException => ExitCode.InputOutput,
         DbException database => StoreTroubles.Of(database) switch
         {

@@ -14,6 +14,7 @@ public static class FailingCalls
     private const int InputOutput = 74;
     private const int CannotCreate = 73;
     private const int Workers = 2;
+    private const int WritesTried = 3;
 
     /// <summary>Writes; an open is one where it may write or make the file.</summary>
     private static readonly string[] Writes = ["pwrite64", "openat"];
@@ -72,14 +73,15 @@ public static class FailingCalls
     }
 
     /// <summary>
-    /// The short column tries each call with one kind of failure only, another one with another seed; a sync always fails there, since a kill at it leaves what
-    /// one at the write before it leaves.
+    /// The short column tries each call with one kind of failure only, another one with another seed, and of the writes, which are many, every third; a sync
+    /// always fails there, since a kill at it leaves what one at the write before it leaves.
     /// </summary>
     private static IEnumerable<string> KindsOf(Trial trial, string call, int number) => Kinds(call) switch
     {
         var kinds when trial.IsLong => kinds,
         var kinds when IsSync(call) => [kinds[0]],
-        var kinds => [kinds[(number + trial.Seed) % kinds.Length]],
+        var kinds when !Writes.Contains(call, StringComparer.Ordinal) => [kinds[(number + trial.Seed) % kinds.Length]],
+        var kinds => (number + trial.Seed) % WritesTried == 0 ? [kinds[(number + trial.Seed) / WritesTried % kinds.Length]] : [],
     };
 
     private static bool IsSync(string call) => call is "fsync" or "fdatasync" or "syncfs";
