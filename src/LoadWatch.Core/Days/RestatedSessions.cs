@@ -19,7 +19,7 @@ public sealed class RestatedSessions(
     IReadOnlySet<string> quantities,
     IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, Histogram>> histograms)
 {
-    private readonly Dictionary<(string Key, string Basis), DaySession> known = [];
+    private readonly Dictionary<(string Key, LocalDate HeartRateOn, LocalDate ValuesOn), DaySession> known = [];
 
     /// <summary>The session with its quantities by the values of a period; its load is left as it is.</summary>
     /// <param name="own">The period of its own date.</param>
@@ -30,9 +30,10 @@ public sealed class RestatedSessions(
             return session;
         }
 
-        if (!known.TryGetValue((session.Key, period.Basis), out var restated))
+        var key = (session.Key, period.HeartRateOn, period.ValuesOn);
+        if (!known.TryGetValue(key, out var restated))
         {
-            known[(session.Key, period.Basis)] = restated = Restate(session, Told(session, ofSession, date, date), Told(session, ofSession, period.HeartRateOn, period.ValuesOn));
+            known[key] = restated = Restate(session, Told(session, ofSession, date, date), Told(session, ofSession, period.HeartRateOn, period.ValuesOn));
         }
 
         return restated;

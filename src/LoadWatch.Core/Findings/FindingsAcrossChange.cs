@@ -37,7 +37,7 @@ public sealed class FindingsAcrossChange(IReadOnlyList<ReferenceChange> changes,
 
         // A change alone makes nothing graver; nor milder what stood before it.
         var severity = former.Since < since || former.Severity < now.Severity ? former.Severity : now.Severity;
-        return WithChanges(severity == now.Severity ? now : former);
+        return WithChanges(severity == now.Severity ? now : former with { Text = $"{former.Text} {Sentence(former.Date)}; told by the value before." });
     }
 
     private Finding Note(Finding finding) => WithChanges(finding) with
@@ -51,7 +51,7 @@ public sealed class FindingsAcrossChange(IReadOnlyList<ReferenceChange> changes,
         Text = $"{finding.Text} {Sentence(finding.Date)}; this is by the value before, by the new one it would be over.",
     };
 
-    private string Sentence(LocalDate told) => $"{Words} on {Wording.Date(since, told)}: {string.Join(", ", changes.Select(ReferenceWords.Of))}";
+    private string Sentence(LocalDate told) => $"{Words} on {Wording.Date(since, told)}: {ReferenceWords.Of(changes)}";
 
     private Finding WithChanges(Finding finding) => finding with
     {

@@ -5,6 +5,10 @@ namespace LoadWatch.Loads;
 /// <summary>Reference values in the words of a sentence.</summary>
 public static class ReferenceWords
 {
+    /// <summary>Several, separated by commas. None where the values are the same and yet no pair any more: of different dates.</summary>
+    public static string Of(IReadOnlyList<ReferenceChange> changes) =>
+        changes.Count == 0 ? "own weight and exponent of different dates" : string.Join(", ", changes.Select(Of));
+
     /// <summary><c>maximal heart rate 190 to 180 bpm</c>.</summary>
     public static string Of(ReferenceChange change)
     {

@@ -18,6 +18,11 @@ public sealed record ArrivalVerdict(ArrivalState State, string? Reason, string? 
     /// <param name="now">A session cannot begin more than a day after it.</param>
     public static ArrivalVerdict Of(DecodedFile file, IReadOnlyCollection<string> claims, Instant now)
     {
+        if (file.Worn.FirstOrDefault(day => !IsUsable(day, now)) is { } strange)
+        {
+            return new ArrivalVerdict(ArrivalState.Held, $"date implausible: a log of {strange.Start:uuuu-MM-dd}", null);
+        }
+
         if (file.Table is { } table)
         {
             return OfTable(file, table, claims);

@@ -56,7 +56,7 @@ internal sealed class SampleReading
         }
 
         var kept = new List<Recording>();
-        foreach (var subject in subjects.InOrder.Where(one => one.Samples.Count > 0))
+        foreach (var subject in subjects.InOrder.Where(one => one.Samples.Count > 0).TakeWhile(_ => recordings <= Most))
         {
             HandOn(subject, take ?? kept.Add);
         }
@@ -232,7 +232,7 @@ internal sealed class SampleReading
     private void HandOn(SampleSubject subject, Action<Recording> taker)
     {
         openRows -= subject.Samples.Count;
-        foreach (var series in subject.End(subject.Name is null ? null : times => SessionGaps.Sessions(times, Most)))
+        foreach (var series in subject.End(subject.Name is null ? null : times => SessionGaps.Sessions(times, Math.Max(1, Most - recordings))))
         {
             taker(ToRecording(++recordings, subject, series));
         }

@@ -27,7 +27,7 @@ internal sealed class MonitoringLog(MemoryBudget budget)
     public void Read(in FitMessage message, long? time)
     {
         Note(time);
-        if ((time ?? Short(message.UInt(FitFields.Monitoring.ShortTimestamp))) is not { } at || !FitClock.IsDate(at))
+        if ((time ?? Short(message.UInt(FitFields.Monitoring.ShortTimestamp))) is not { } at || !FitClock.IsDate(at - ((LongestSpread + 1) * MinuteMilliseconds)))
             return;
 
         if (message.Int(FitFields.Monitoring.HeartRate) is { } rate and > 0)
@@ -46,7 +46,10 @@ internal sealed class MonitoringLog(MemoryBudget budget)
     /// <summary>A value is written when its minute is over.</summary>
     private static long Before(long time) => (time - 1) / MinuteMilliseconds;
 
-    /// <summary>Steps since the counter was last written belong to the minutes since then; a counter that fell began anew.</summary>
+    /// <summary>
+    /// Steps since the counter was last written belong to the minutes since then; after a longer silence nobody knows to which, and none gets them. A counter that
+    /// fell began anew.
+    /// </summary>
     private void Count(int kind, long at, double count)
     {
         var isKnown = counters.TryGetValue(kind, out var before) && before.Time < at;
@@ -54,7 +57,10 @@ internal sealed class MonitoringLog(MemoryBudget budget)
         if (!isKnown || (count >= before.Count ? count - before.Count : count) is not (> 0 and var steps))
             return;
 
-        var spread = Math.Clamp(Before(at) - Before(before.Time), 1, LongestSpread);
+        var spread = Math.Max(1, Before(at) - Before(before.Time));
+        if (spread > LongestSpread)
+            return;
+
         for (var minute = Before(at); minute > Before(at) - spread; minute--)
         {
             Set(minute, known => known with

@@ -19,7 +19,7 @@ public static class InspectCommand
     // Without a configuration: the most that one can set.
     private const long LargestFileBytes = 512L * 1024 * 1024;
 
-    // Larger ones that are text are read as a stream, whatever their size.
+    // Larger ones that are text are read as a stream, whatever their size; with a configuration what a sweep takes in is read like there.
     private const long HeldWholeBytes = 32L * 1024 * 1024;
 
     public static Command Create()
@@ -64,7 +64,8 @@ public static class InspectCommand
         var configuration = configPath is null ? null : ConfigurationReader.Read(configPath);
         var largest = configuration?.LargestFileBytes ?? LargestFileBytes;
         var decoders = new DecoderSet(configuration?.Layouts ?? Decoding.Csv.BuiltInLayouts.All, ContainerLimits.For(largest));
-        var lines = names.AsParallel().AsOrdered().SelectMany(name => Inspect(decoders, name, largest)).AsSequential();
+        var reading = new Reading(decoders, largest, configuration?.LargestFileBytes ?? HeldWholeBytes, configuration?.Inboxes.Any(inbox => inbox.Salvage) ?? false);
+        var lines = names.AsParallel().AsOrdered().SelectMany(name => Inspect(reading, name)).AsSequential();
         using var output = new StreamWriter(Console.OpenStandardOutput(), new UTF8Encoding(false), 1 << 16);
         if (json)
         {
@@ -81,12 +82,12 @@ public static class InspectCommand
         return ExitCode.Ok;
     }
 
-    private static IEnumerable<InspectLine> Inspect(DecoderSet decoders, string name, long largest)
+    private static IEnumerable<InspectLine> Inspect(Reading reading, string name)
     {
         switch (SafeFile.Open(name))
         {
             case OpenedFile opened:
-                return Inspect(decoders, name, opened, largest);
+                return Inspect(reading, name, opened);
             case UnopenedFile unopened:
                 return [InspectLine.Unreadable(name, unopened.Reason)];
             default:
@@ -94,18 +95,18 @@ public static class InspectCommand
         }
     }
 
-    private static IEnumerable<InspectLine> Inspect(DecoderSet decoders, string name, OpenedFile opened, long largest)
+    private static IEnumerable<InspectLine> Inspect(Reading reading, string name, OpenedFile opened)
     {
         using (opened)
         {
-            if (opened.Stamp.Size > HeldWholeBytes && IsText(opened.Stream))
+            if (opened.Stamp.Size > reading.HeldWholeBytes && IsText(opened.Stream))
             {
-                return Through(decoders, name);
+                return Through(reading.Decoders, name);
             }
 
-            if (opened.Stamp.Size > largest)
+            if (opened.Stamp.Size > reading.LargestFileBytes)
             {
-                return [InspectLine.Unreadable(name, $"larger than {largest / (1024 * 1024)} MB")];
+                return [InspectLine.Unreadable(name, $"larger than {reading.LargestFileBytes / (1024 * 1024)} MB")];
             }
 
             if (ReadAll(opened) is not { } bytes)
@@ -114,7 +115,7 @@ public static class InspectCommand
             }
 
             var sha = Convert.ToHexStringLower(SHA256.HashData(bytes));
-            return ArrivalContent.Expand(decoders, sha, name, bytes).SelectMany(content => Of(decoders, content)).ToList();
+            return ArrivalContent.Expand(reading.Decoders, sha, name, bytes).SelectMany(content => Of(reading, content)).ToList();
         }
     }
 
@@ -134,9 +135,10 @@ public static class InspectCommand
         try
         {
             var (file, isRefused) = decoders.ReadText(() => SafeFile.Reopen(name), recording => lines.Add(InspectLine.Of(name, unknown, recording)));
+            var problems = file.Problems.Select(ProblemLine.Of).ToList();
             return isRefused || lines.Count == 0
                 ? [InspectLine.WithoutRecording(name, file.Kind, file.Problems) with { Table = TableText(file.Table) }]
-                : lines.ConvertAll(line => line with { Problems = [.. file.Problems.Select(ProblemLine.Of)] });
+                : lines.ConvertAll(line => line with { Problems = problems });
         }
         catch (IOException)
         {
@@ -158,7 +160,7 @@ public static class InspectCommand
         }
     }
 
-    private static IEnumerable<InspectLine> Of(DecoderSet decoders, ArrivalContent content)
+    private static IEnumerable<InspectLine> Of(Reading reading, ArrivalContent content)
     {
         if (content.Kind is ContentKind.Gzip or ContentKind.Zip)
         {
@@ -167,7 +169,7 @@ public static class InspectCommand
                 : [];
         }
 
-        var file = decoders.Decode(content.Bytes);
+        var file = reading.Decoders.Decode(content.Bytes, reading.Salvages);
         return file.Recordings.Count == 0
             ? [InspectLine.WithoutRecording(content.Path, file.Kind, file.Problems) with { Table = TableText(file.Table) }]
             : file.Recordings.Select(recording => InspectLine.Of(content.Path, file, recording));
@@ -215,4 +217,9 @@ public static class InspectCommand
             output.Write($"    {problem.Severity}: {OneLine.Of(problem.Text)}\n");
         }
     }
+
+    /// <param name="LargestFileBytes">Larger ones are not read, but for text.</param>
+    /// <param name="HeldWholeBytes">Text of more bytes is read as a stream.</param>
+    /// <param name="Salvages">Whether what lies before the end of a cut FIT file is used.</param>
+    private sealed record Reading(DecoderSet Decoders, long LargestFileBytes, long HeldWholeBytes, bool Salvages);
 }

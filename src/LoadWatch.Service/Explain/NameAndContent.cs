@@ -14,7 +14,7 @@ public static class NameAndContent
         string[] expected = ending switch
         {
             ".fit" => ["fit"],
-            ".csv" or ".tsv" or ".txt" => ["csv", "table"],
+            ".csv" or ".tsv" or ".txt" => ["csv", "table", "text"],
             ".gz" => ["gzip"],
             ".zip" => ["zip"],
             _ => [],

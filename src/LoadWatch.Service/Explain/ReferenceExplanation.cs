@@ -25,7 +25,7 @@ internal static class ReferenceExplanation
         foreach (var (earlier, later) in periods.All.Zip(periods.All.Skip(1)).Where(pair => pair.Second.From <= date && pair.Second.From > date.PlusDays(-LoadCalendar.LookBackDays)))
         {
             var also = later.From > date.PlusDays(-ReferencePeriods.WindowDays) ? "; rules of load are read by the values before it, too" : "";
-            text.AppendLine(CultureInfo.InvariantCulture, $"    changed on {Words.Date(later.From)}: {string.Join(", ", later.ChangesSince(earlier).Select(ReferenceWords.Of))}{also}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    changed on {Words.Date(later.From)}: {ReferenceWords.Of(later.ChangesSince(earlier))}{also}");
         }
     }
 }

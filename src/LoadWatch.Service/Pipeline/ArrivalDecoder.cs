@@ -71,7 +71,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         {
             Problems = Problems(file),
             Table = verdict.State == ArrivalState.Stored ? file.Table : null,
-            Questions = verdict.State == ArrivalState.Stored && file.Table is not null ? RowsNotUsed(file.Problems) : [],
+            Questions = verdict.State == ArrivalState.Stored && file is { Table: not null, Worn.Count: 0 } ? RowsNotUsed(file.Problems) : [],
         };
     }
 

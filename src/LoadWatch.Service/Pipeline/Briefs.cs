@@ -125,8 +125,15 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         return new BriefSubject(person, configuration.Groups[person.Group], days, alerts, Remarks(days)) { Notes = Notes(session, person, through) };
     }
 
-    private static List<Finding> Notes(StoreSession session, Person person, LocalDate date) =>
-        [.. session.Findings.OfPerson(person.Id, date, date).Where(finding => finding.Severity == Severity.Note && finding.Since > date.PlusDays(-NoteDays))];
+    /// <summary>Told for a week from the day on which each came to be a note.</summary>
+    private static List<Finding> Notes(StoreSession session, Person person, LocalDate date)
+    {
+        var told = NotesOn(session, person, date.PlusDays(-NoteDays)).Select(note => note.Key).ToHashSet();
+        return [.. NotesOn(session, person, date).Where(note => !told.Contains(note.Key))];
+    }
+
+    private static IEnumerable<Finding> NotesOn(StoreSession session, Person person, LocalDate date) =>
+        session.Findings.OfPerson(person.Id, date, date).Where(finding => finding.Severity == Severity.Note);
 
     private static AlertNews News(Alert alert, List<AlertChange> changes)
     {

@@ -21,6 +21,9 @@ public sealed class Recomputations(Store store, Archive archive, ArchiveReader r
     private readonly HashSet<OutdatedObject> suspects = [];
     private bool isProbed;
 
+    /// <summary>How many outdated contents are left aside because they end a child: nobody waits for them (I-4).</summary>
+    public int Aside => store.Read(session => suspects.Sum(original => session.Outdated.Of(original).Count));
+
     /// <summary>Called with each original that is through.</summary>
     public Action Progressed { get; set; } = () => { };
 

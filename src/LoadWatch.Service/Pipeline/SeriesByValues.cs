@@ -19,7 +19,7 @@ internal sealed class SeriesByValues(Person person, Group group, ReferenceChange
 
     /// <summary>With what rules of load begin a date.</summary>
     public RunsAcrossChange Runs(Carried carried, LocalDate from) =>
-        RunsAcrossChange.At(carried, period, changes.Periods.Before(from), changes.Periods.Before(from.PlusDays(-1)));
+        RunsAcrossChange.At(carried, period, changes.Periods.Before(from), changes.Periods.Before(from.PlusDays(-1)), IsNew(from));
 
     /// <summary>Lines by other values say nothing: those of the months at hand are drawn anew, older ones are gone.</summary>
     public CarriedLoads? CarriedLoads(Day? last, LocalDate from) => last?.Carried.Loads is { } loads && period.LoadFrom == from

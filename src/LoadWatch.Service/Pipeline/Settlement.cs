@@ -115,12 +115,17 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
             .Select(same =>
             {
                 // A content read back from the archive was seen under the names on record; one seen now has its name besides.
-                var names = session.Sightings.Of(same.Key).Except(gone).Select(sighting => new SeenName(sighting.Inbox, sighting.Path))
-                    .Concat(same.Where(item => item.Origin is not null).Select(item => new SeenName(item.Origin!.Inbox, item.Content.Path)))
-                    .ToList();
-                return (same.First().Content, Claims: Attribution.Claims(decided.GetValueOrDefault(same.Key)?.Person, names, configuration), Salvages: configuration.Salvages(names.Select(name => name.Inbox)), Arrival: session.Arrivals.Get(same.Key));
+                var known = session.Sightings.Of(same.Key).Except(gone).Select(sighting => new SeenName(sighting.Inbox, sighting.Path)).ToList();
+                var names = known.Concat(same.Where(item => item.Origin is not null).Select(item => new SeenName(item.Origin!.Inbox, item.Content.Path))).ToList();
+                var (salvaged, salvages) = (configuration.Salvages(known.Select(name => name.Inbox)), configuration.Salvages(names.Select(name => name.Inbox)));
+                return (
+                    same.First().Content,
+                    Claims: Attribution.Claims(decided.GetValueOrDefault(same.Key)?.Person, names, configuration),
+                    Salvages: salvages,
+                    IsNewToSalvage: salvages && !salvaged,
+                    Arrival: session.Arrivals.Get(same.Key));
             })
-            .Where(item => force || IsPending(item.Arrival, item.Content, item.Claims))
+            .Where(item => force || IsPending(item.Arrival, item.Content, item.Claims) || (item.IsNewToSalvage && item.Arrival?.State == ArrivalState.Refused))
             .Select(item => (item.Content, item.Claims, decided.ContainsKey(item.Content.Sha), item.Salvages, item.Arrival?.State))
             .ToList();
     }

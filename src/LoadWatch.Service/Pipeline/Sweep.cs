@@ -134,9 +134,10 @@ public sealed class Sweep
         tables.TakeUp(cancel);
         decoder.Basis = TableBasis.Of(configuration, store);
         recomputations.Run(patience, cancel);
+        var aside = recomputations.Aside;
         Report.PeopleBehind = store.Write(session =>
         {
-            if (session.Outdated.Count() == 0)
+            if (session.Outdated.Count() == aside)
             {
                 session.Derived.SetRebuild(RebuildState.None);
             }

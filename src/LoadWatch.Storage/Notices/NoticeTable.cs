@@ -59,9 +59,11 @@ public sealed class NoticeTable
         """;
 
     private const string SelectBacklog = """
-        SELECT COUNT(*) AS number, MIN(n.decided) AS oldest, MIN(CASE WHEN d.channel = 'mail' AND NOT EXISTS (
+        SELECT COUNT(*) AS number, MIN(n.decided) AS oldest, MIN(CASE WHEN d.channel = 'mail' AND (NOT EXISTS (
             SELECT 1 FROM delivery other JOIN notice m ON m.key = other.notice
-            WHERE other.channel = 'mail' AND other.state = 'delivered' AND m.decided >= d.first_attempt) THEN d.first_attempt END) AS mail_tried_since
+            WHERE other.channel = 'mail' AND other.state = 'delivered' AND m.decided >= d.first_attempt)
+            OR (SELECT COUNT(DISTINCT mate.recipient) FROM delivery mate
+                WHERE mate.channel = 'mail' AND mate.state = 'pending' AND mate.first_attempt IS NOT NULL) > 1) THEN d.first_attempt END) AS mail_tried_since
         FROM delivery d JOIN notice n ON n.key = d.notice WHERE d.state = 'pending'
         """;
 

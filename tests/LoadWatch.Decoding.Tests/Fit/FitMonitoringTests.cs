@@ -72,6 +72,23 @@ public class FitMonitoringTests
     }
 
     [Fact]
+    public void StepsOfALongSilenceBelongToNoMinute()
+    {
+        var part = Day();
+        part.Define(3, FullSteps).Message(3, Start + 600, Walking, 0).Message(3, Start + 600 + (16 * 60), Walking, 1600);
+        Assert.Empty(part.Decode().Recordings);
+    }
+
+    [Fact]
+    public void ALogOfTheFirstMinutesThereAreIsSurvived()
+    {
+        const int First = 0x1000_0000;
+        var part = Day();
+        part.Define(3, FullSteps).Message(3, First, Walking, 0).Message(3, First + 60, Walking, 160);
+        Assert.Empty(part.Decode().Recordings);
+    }
+
+    [Fact]
     public void ACounterThatFellBeganAnew()
     {
         var part = Day();

@@ -61,6 +61,21 @@ public sealed class SalvageTests : IDisposable
         Assert.Equal(before, folder.Export());
     }
 
+    [Theory]
+    [InlineData("anna/ride.fit", "../salvaged/anna/ride.fit")]
+    [InlineData("../salvaged/anna/ride.fit", "anna/ride.fit")]
+    public void OneInboxThatAsksForItIsEnoughInWhateverOrder(string first, string second)
+    {
+        var text = File.ReadAllText(folder.ConfigPath);
+        folder.Write("loadwatch.json", text.Replace(
+            "\"inboxes\": [", "\"inboxes\": [{ \"name\": \"salvaged\", \"path\": \"salvaged\", \"take\": \"leave\", \"salvage\": true }, ", StringComparison.Ordinal));
+        folder.Put(first, Cut);
+        folder.Sweep();
+        folder.Put(second, Cut);
+        folder.Sweep();
+        Assert.Equal(ArrivalState.Stored, folder.Arrival(Cut)!.State);
+    }
+
     private IReadOnlyList<string> Remarks() => Assert.Single(folder.Read((_, session) => session.Activities.OfPerson("anna"))).Values.Remarks;
 
     private void Salvage(bool on)
