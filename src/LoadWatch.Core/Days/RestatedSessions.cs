@@ -22,10 +22,9 @@ public sealed class RestatedSessions(
     private readonly Dictionary<(string Key, LocalDate HeartRateOn, LocalDate ValuesOn), DaySession> known = [];
 
     /// <summary>The session with its quantities by the values of a period; its load is left as it is.</summary>
-    /// <param name="own">The period of its own date.</param>
-    public DaySession In(ReferencePeriod period, ReferencePeriod own, LocalDate date, DaySession session)
+    public DaySession In(ReferencePeriod period, LocalDate date, DaySession session)
     {
-        if (period.Basis == own.Basis || !histograms.TryGetValue(session.Key, out var ofSession))
+        if (!histograms.TryGetValue(session.Key, out var ofSession))
         {
             return session;
         }

@@ -4,27 +4,13 @@ namespace LoadWatch.Decoding.Containers;
 /// A read-only stream over a stretch of packed bytes that knows how far it was read, since the inflating stream does not say where it
 /// stopped.
 /// </summary>
-internal sealed class PackedBytes(ReadOnlyMemory<byte> bytes) : Stream
+internal sealed class PackedBytes(ReadOnlyMemory<byte> bytes) : ForwardStream
 {
     /// <summary>Where the last read began. The packed data ends behind it, but for the few bytes that the inflater may hold back.</summary>
     public int LastRead { get; private set; }
 
     /// <summary>Bytes handed out so far.</summary>
     public int Handed { get; private set; }
-
-    public override bool CanRead => true;
-
-    public override bool CanSeek => false;
-
-    public override bool CanWrite => false;
-
-    public override long Length => throw new NotSupportedException();
-
-    public override long Position
-    {
-        get => throw new NotSupportedException();
-        set => throw new NotSupportedException();
-    }
 
     public override int Read(Span<byte> buffer)
     {
@@ -34,16 +20,4 @@ internal sealed class PackedBytes(ReadOnlyMemory<byte> bytes) : Stream
         Handed += count;
         return count;
     }
-
-    public override int Read(byte[] buffer, int offset, int count) => Read(buffer.AsSpan(offset, count));
-
-    public override void Flush()
-    {
-    }
-
-    public override long Seek(long offset, SeekOrigin origin) => throw new NotSupportedException();
-
-    public override void SetLength(long value) => throw new NotSupportedException();
-
-    public override void Write(byte[] buffer, int offset, int count) => throw new NotSupportedException();
 }

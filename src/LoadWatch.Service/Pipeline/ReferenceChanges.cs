@@ -12,9 +12,6 @@ public sealed class ReferenceChanges(ReferencePeriods periods, Func<RestatedSess
 
     public ReferencePeriods Periods => periods;
 
-    public DaySession In(ReferencePeriod period, LocalDate date, DaySession session)
-    {
-        var own = periods.On(date);
-        return own.Basis == period.Basis ? session : sessions.Value.In(period, own, date, session);
-    }
+    public DaySession In(ReferencePeriod period, LocalDate date, DaySession session) =>
+        periods.On(date).Basis == period.Basis ? session : sessions.Value.In(period, date, session);
 }
