@@ -6,8 +6,8 @@ namespace LoadWatch.Tests.Published;
 public sealed class PublishedCheck
 {
     private readonly string[] published;
-    private readonly Func<string[]> ours;
-    private readonly Func<bool> holds;
+    private readonly Lazy<string[]> ours;
+    private readonly Lazy<bool> holds;
     private readonly string unit;
 
     /// <param name="what">What is looked at, and on which input.</param>
@@ -19,13 +19,10 @@ public sealed class PublishedCheck
         (What, Source, Tolerance) = (what, source, tolerance.ToString());
         this.unit = unit;
         this.published = [.. published.Select(number => number.ToString("0.################", CultureInfo.InvariantCulture))];
-        this.ours = () => [.. ours().Select(number => Math.Round(number, tolerance.Decimals).ToString("0.#########", CultureInfo.InvariantCulture))];
-        holds = () =>
-        {
-            var found = ours();
-            return found.Length == published.Length
-                && found.Select((number, index) => Math.Abs(number - published[index]) <= tolerance.At(index, published[index])).All(within => within);
-        };
+        var found = new Lazy<double[]>(ours);
+        this.ours = new Lazy<string[]>(() => [.. found.Value.Select(number => Math.Round(number, tolerance.Decimals).ToString("0.#########", CultureInfo.InvariantCulture))]);
+        holds = new Lazy<bool>(() => found.Value.Length == published.Length
+            && found.Value.Select((number, index) => Math.Abs(number - published[index]) <= tolerance.At(index, published[index])).All(within => within));
     }
 
     /// <summary>The same for names and classes, which are right or wrong.</summary>
@@ -34,8 +31,8 @@ public sealed class PublishedCheck
         (What, Source, Tolerance) = (what, source, "none");
         unit = "";
         this.published = published;
-        this.ours = ours;
-        holds = () => ours().SequenceEqual(published, StringComparer.Ordinal);
+        this.ours = new Lazy<string[]>(ours);
+        holds = new Lazy<bool>(() => this.ours.Value.SequenceEqual(published, StringComparer.Ordinal));
     }
 
     public string What { get; }
@@ -44,12 +41,12 @@ public sealed class PublishedCheck
 
     public string Tolerance { get; }
 
-    public bool Holds => holds();
+    public bool Holds => holds.Value;
 
     /// <summary>The line of the table.</summary>
     /// <param name="list">The list that the check stands in.</param>
     public string Line(string list) =>
-        $"| {What} | {Source.Words} | {Source.How} | {InUnit(published)} | {InUnit(ours())} | {Tolerance} | `{list}` |";
+        $"| {What} | {Source.Words} | {Source.How} | {InUnit(published)} | {InUnit(ours.Value)} | {Tolerance} | `{list}` |";
 
     private string InUnit(string[] values) => string.Join(", ", values) + (unit.Length == 0 ? "" : $" {unit}");
 }

@@ -4,6 +4,7 @@ using System.Text;
 using System.Text.Json;
 using System.Text.Json.Serialization;
 using System.Text.RegularExpressions;
+using LoadWatch.Activities;
 using LoadWatch.Decoding;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
@@ -21,6 +22,7 @@ namespace LoadWatch.Service.Tests.Configuration;
 public sealed class ReadmeTests
 {
     private static readonly string Readme = File.ReadAllText(Repository.Config("README.md")).ReplaceLineEndings("\n");
+    private static readonly JsonSerializerOptions Defaults = new(ConfigurationJson.Options) { WriteIndented = false };
     private static readonly string[] Lines = Readme.Split('\n');
 
     /// <summary>The records of numbers with the text in front of the table that explains them.</summary>
@@ -28,7 +30,7 @@ public sealed class ReadmeTests
     {
         get
         {
-            var data = new TheoryData<string, Type> { { "## Intake", typeof(IntakeEntry) }, { "**`quality`**", typeof(QualityLimits) } };
+            var data = new TheoryData<string, Type> { { "## Intake", typeof(IntakeEntry) }, { "**`quality`**", typeof(QualityLimits) }, { "**`equations`**", typeof(EquationChoices) } };
             foreach (var rule in typeof(RuleLimits).GetProperties().Where(property => property.Name != nameof(RuleLimits.Quantities)))
             {
                 data.Add($"**`{KeyOf(rule)}`**", rule.PropertyType);
@@ -51,6 +53,14 @@ public sealed class ReadmeTests
             if (property.GetCustomAttribute<RangeAttribute>() is { } range)
             {
                 Assert.Contains(cells, cell => Regex.IsMatch(cell, $@"^{Invariant(range.Minimum)} to {Invariant(range.Maximum)}($|[,;])"));
+            }
+            else if (property.GetCustomAttribute<NumbersAttribute>() is { } numbers)
+            {
+                Assert.Equal($"{Invariant(numbers.Lowest)} to {Invariant(numbers.Highest)} each{(numbers.IsRising ? ", rising" : "")}", cells[2]);
+            }
+            else if (property.PropertyType.IsEnum)
+            {
+                Assert.All(ValueCheck.WordsOf(property.PropertyType), word => Assert.Contains($"`{word}`", cells[3], StringComparison.Ordinal));
             }
             else
             {
@@ -85,7 +95,7 @@ public sealed class ReadmeTests
     {
         Type[] types =
         [
-            typeof(InboxEntry), typeof(GroupEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(QualityLimits), typeof(CsvLayout), typeof(CsvQuality), typeof(CsvField),
+            typeof(InboxEntry), typeof(GroupEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(QualityLimits), typeof(EquationChoices), typeof(CsvLayout), typeof(CsvQuality), typeof(CsvField),
             typeof(CsvWideEntry),
         ];
         var missing = types
@@ -183,7 +193,7 @@ public sealed class ReadmeTests
 
     private static string Invariant(object? value) => FormattableString.Invariant($"{value}");
 
-    private static string Json(object? value) => JsonSerializer.Serialize(value);
+    private static string Json(object? value) => JsonSerializer.Serialize(value, Defaults);
 
     private static bool IsNamed(string word) => Regex.IsMatch(Readme, $@"`([a-z_]+\.)*\.?{Regex.Escape(word)}`");
 
