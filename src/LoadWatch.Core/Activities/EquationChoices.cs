@@ -11,10 +11,10 @@ namespace LoadWatch.Activities;
 public sealed record EquationChoices
 {
     /// <summary>Estimates a maximal heart rate from age where none is anchored: tanaka, nes, gellish (from memory), gulati (of women only, of others tanaka) or sydo.</summary>
-    public HeartRateMaxEquation HeartRateMax { get; init; } = HeartRateMaxEquation.Tanaka;
+    public HeartRateMaxEquation HeartRateMaxByAge { get; init; } = HeartRateMaxEquation.Tanaka;
 
     /// <summary>Tells the share of the maximum from repetitions to failure: load_chart, epley, brzycki, lander (from memory), mayhew or wathan.</summary>
-    public OneRepetitionMaxEquation OneRepetitionMax { get; init; } = OneRepetitionMaxEquation.LoadChart;
+    public OneRepetitionMaxEquation OneRepetitionMaxByRepetitions { get; init; } = OneRepetitionMaxEquation.LoadChart;
 
     /// <summary>Factor and exponent of Banister's training impulse for men, each 0 to 10. From secondary pages that agree.</summary>
     [Numbers(2, 0, 10)]

@@ -54,7 +54,7 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
             ? FromMaximum(stated, repetitions, load, maximum, equations.FastLoadFactor)
             : set.IsFast
                 ? new SetDemand(repetitions, 0, 0, Reserve: null, Grade.D, SetRule.DeclaredFast)
-                : FromRepetitions(stated, repetitions, equations.OneRepetitionMax);
+                : FromRepetitions(stated, repetitions, equations.OneRepetitionMaxByRepetitions);
         return demand is null
             ? (null, $"{(stated.Kilograms is null ? "load" : "one_repetition_max")}, or repetitions in reserve up to 12 in all")
             : (demand with { SecondsEach = stated.RepetitionSeconds }, null);

@@ -75,7 +75,7 @@ public sealed class ConfigurationReader
             people,
             groups,
             contacts,
-            new AnchorBook(anchors!) { HeartRateMaxEquation = computation.Equations.HeartRateMax },
+            new AnchorBook(anchors!) { HeartRateMaxEquation = computation.Equations.HeartRateMaxByAge },
             inboxes,
             [.. file.Layouts, .. BuiltInLayouts.All],
             computation,
