@@ -17,6 +17,6 @@ public enum HeartRateMaxEquation
     /// Circulation 122:130-137.</summary>
     Gulati,
 
-    /// <summary>220 - 0.95 age of men, 210 - 0.79 age of women, the mean where sex is not stated. Sydo et al. 2014, Mayo Clin Proc (title not read).</summary>
+    /// <summary>220 - 0.95 age of men, 210 - 0.79 age of women, the mean where sex is not stated. Sydó et al. 2014, Mayo Clin Proc (title not read).</summary>
     Sydo,
 }

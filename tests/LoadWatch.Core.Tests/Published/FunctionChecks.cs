@@ -12,7 +12,7 @@ internal static class FunctionChecks
     private static readonly Source Ewgsop2 = new(
         "Cruz-Jentoft et al. 2019, Sarcopenia: revised European consensus on definition and diagnosis, Age Ageing 48:16-31", Reading.Read);
 
-    private static readonly Source FromMemory = new("the same", Reading.FromMemory);
+    private static readonly Source FromMemory = new("Cruz-Jentoft et al. 2019, Age Ageing 48:16-31", Reading.FromMemory);
 
     public static IReadOnlyList<PublishedCheck> Rows { get; } =
     [

@@ -14,7 +14,7 @@ internal static class HeartRateChecks
     private static readonly Source Gulati2010 = new(
         "Gulati et al. 2010, Heart rate response to exercise stress testing in asymptomatic women, Circulation 122:130-137", Reading.Read);
 
-    private static readonly Source Sydo2014 = new("Sydo et al. 2014, Mayo Clin Proc (abstract)", Reading.Read);
+    private static readonly Source Sydo2014 = new("Sydó et al. 2014, Mayo Clin Proc (abstract)", Reading.Read);
 
     private static readonly Source Gellish2007 = new(
         "Gellish et al. 2007, Longitudinal modeling of the relationship between age and maximal heart rate, Med Sci Sports Exerc 39:822-829", Reading.FromMemory);

@@ -15,7 +15,7 @@ internal static class LoadChecks
         "Windt and Gabbett 2018, Is it all for naught? What does mathematical coupling mean for acute:chronic workload ratios? (title from memory), Br J Sports Med 53:988-990",
         Reading.Read);
 
-    private static readonly Source WindtFromMemory = new("the same", Reading.FromMemory);
+    private static readonly Source WindtFromMemory = new("Windt and Gabbett 2018, Br J Sports Med 53:988-990", Reading.FromMemory);
 
     private static readonly Source Leaflet = new("leaflet of a physiotherapy clinic (watsoniaphysiotherapy.com.au), a secondary source", Reading.Read);
 

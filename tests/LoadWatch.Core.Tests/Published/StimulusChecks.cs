@@ -5,9 +5,9 @@ namespace LoadWatch.Tests.Published;
 /// <summary>What endurance channels ask of motor units: recruitment in dynamic work, the cost of slopes.</summary>
 internal static class StimulusChecks
 {
-    private static readonly Source Thomson1979 = new("Thomson, Green and Houston 1979 (authors from memory), Pflugers Arch 379:105 (abstract)", Reading.Read);
+    private static readonly Source Thomson1979 = new("Thomson, Green and Houston 1979 (authors from memory), Pflügers Arch 379:105 (abstract)", Reading.Read);
 
-    private static readonly Source Vollestad1984 = new("Vollestad, Vaage and Hermansen 1984, Acta Physiol Scand 122:433 (abstract)", Reading.Read);
+    private static readonly Source Vollestad1984 = new("Vøllestad, Vaage and Hermansen 1984, Acta Physiol Scand 122:433 (abstract)", Reading.Read);
 
     public static IReadOnlyList<PublishedCheck> Rows { get; } =
     [

@@ -17,8 +17,8 @@ public sealed record Tolerance(IReadOnlyList<double> Distances, bool IsRelative 
 
     public double At(int index, double published) => Distances[index % Distances.Count] * (IsRelative ? Math.Abs(published) : 1);
 
-    /// <summary>Decimals in which a difference of this size shows.</summary>
-    public int Decimals => IsRelative ? 3 : Distances.Max(distance => Math.Clamp((int)Math.Ceiling(-Math.Log10(Math.Max(distance, 1e-9))), 0, 9));
+    /// <summary>Decimals in which a difference of a tenth of this size shows.</summary>
+    public int Decimals => IsRelative ? 3 : Distances.Max(distance => Math.Clamp(1 + (int)Math.Ceiling(-Math.Log10(Math.Max(distance, 1e-9))), 0, 9));
 
     public override string ToString() => IsRelative
         ? string.Create(CultureInfo.InvariantCulture, $"{Distances[0] * 100:0.##} %")
