@@ -42,6 +42,7 @@ public sealed class ConfigurationReader
         {
             UsableShareWanted = file.Computation.UsableShareWanted,
             Quality = file.Computation.Quality,
+            Equations = file.Computation.Equations,
             HeartRateReserveBounds = Ascending(file.Computation.HeartRateReserveBounds, "$.computation.heart_rate_reserve_bounds"),
             PowerBounds = Ascending(file.Computation.PowerBounds, "$.computation.power_bounds"),
             SpeedBounds = Ascending(file.Computation.SpeedBounds, "$.computation.speed_bounds"),
@@ -75,7 +76,7 @@ public sealed class ConfigurationReader
             people,
             groups,
             contacts,
-            new AnchorBook(anchors!),
+            new AnchorBook(anchors!) { HeartRateMaxEquation = computation.Equations.HeartRateMaxByAge },
             inboxes,
             [.. file.Layouts, .. BuiltInLayouts.All],
             computation,

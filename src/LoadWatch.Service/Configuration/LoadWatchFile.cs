@@ -1,5 +1,6 @@
 using System.ComponentModel.DataAnnotations;
 using System.Text.Json.Serialization;
+using LoadWatch.Activities;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
 using LoadWatch.People;
@@ -214,6 +215,9 @@ public sealed record ComputationEntry
 
     /// <summary>From when on a heart rate is no reading of the person.</summary>
     public QualityLimits Quality { get; init; } = new();
+
+    /// <summary>Which published equations are used, and their constants from memory.</summary>
+    public EquationChoices Equations { get; init; } = new();
 
     /// <summary>Inner bounds of the heart-rate zones, fractions of heart-rate reserve, where thresholds are not anchored.</summary>
     public IReadOnlyList<double> HeartRateReserveBounds { get; init; } = [0.30, 0.40, 0.60, 0.90];

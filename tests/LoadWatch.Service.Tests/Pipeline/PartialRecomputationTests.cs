@@ -24,6 +24,9 @@ public sealed class PartialRecomputationTests : IDisposable
 
         """;
 
+    /// <summary>With one object in it or none.</summary>
+    private const string Computation = "\"computation\": \\{([^{}]|\\{[^}]*\\})*\\}";
+
     /// <summary>Every kind of change, each with what it does to the files of the configuration.</summary>
     private static readonly (string Name, Action<WorkingFolder, int> Make)[] Changes =
     [
@@ -40,7 +43,8 @@ public sealed class PartialRecomputationTests : IDisposable
         ("other group", (folder, _) => folder.Replace("roster.csv", "(cara,Cara Costa),[a-z]+", "$1,class")),
         ("limits", (folder, number) => folder.Replace("loadwatch.json", "\"silence\": \\{[^}]*\\}", $"\"silence\": {{ \"enabled\": {(number % 2 == 0 ? "true" : "false")} }}")),
         ("load", (folder, _) => folder.Replace("loadwatch.json", "\"load_quantity\": \"[a-z_]+\"", "\"load_quantity\": \"edwards_load\"")),
-        ("bounds", (folder, number) => folder.Replace("loadwatch.json", "\"computation\": \\{[^}]*\\}", $"\"computation\": {{ \"speed_bounds\": [2, {(number % 3) + 3}] }}")),
+        ("equations", (folder, number) => folder.Replace("loadwatch.json", Computation, $"\"computation\": {{ \"equations\": {{ \"banister_men\": [0.6{number % 3}, 1.9], \"banister_women\": [0.8, 1.7{number % 3}], \"heart_rate_max_by_age\": \"{(number % 2 == 0 ? "nes" : "gellish")}\" }} }}")),
+        ("bounds", (folder, number) => folder.Replace("loadwatch.json", Computation, $"\"computation\": {{ \"speed_bounds\": [2, {(number % 3) + 3}] }}")),
         ("layout", (folder, _) => folder.Replace("loadwatch.json", "\"sport\": \"[a-z]+\"", "\"sport\": \"rugby\"")),
         ("device", (folder, number) => folder.Write("devices.csv", $"serial,person,from,to,session\n4711,{(number % 2 == 0 ? "anna" : "cara")},,,\n")),
         ("file names", (folder, number) => folder.Replace("loadwatch.json", "\"take\": \"leave\"(, \"file_pattern\": \"[^\"]*\")?", $"\"take\": \"leave\", \"file_pattern\": \"{(number % 2 == 0 ? "{person}*" : "*{person}")}\"")),
