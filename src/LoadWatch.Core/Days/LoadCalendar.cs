@@ -33,9 +33,10 @@ public static class LoadCalendar
         string person, IReadOnlyList<Day> before, IReadOnlyList<ActivityOnDay> activities, LocalDate to, PersonPlan plan)
     {
         var loads = LoadTrend.After(before);
+        var sessions = SessionTrend.After(before);
         var regions = BodyRegions.All.Select(region => StimulusTrend.After(region, before)).ToList();
         return CalendarDates.Lay(before.Count == 0 ? null : before[^1], activities, to, plan)
-            .Select(date => loads.Add(Bare(person, date)) with { Regions = Regions(regions, date) })
+            .Select(date => sessions.Add(loads.Add(Bare(person, date)) with { Regions = Regions(regions, date) }))
             .ToList();
     }
 
@@ -47,6 +48,7 @@ public static class LoadCalendar
         var trend = new LoadTrend(firstCovered);
         return [.. days.Select(day => trend.Add(day with
         {
+            LoadError = null,
             Load = DayLoad.Of(day.State, [.. day.Sessions.Where(session => session.AddsLoad).Select(session => load(day, session))]),
         }))];
     }
@@ -58,6 +60,7 @@ public static class LoadCalendar
         State = date.State,
         StateSource = date.StateSource,
         Load = date.Load,
+        LoadError = date.LoadError,
         DaysSinceRecorded = date.DaysSinceRecorded,
         Plan = date.Plan,
         Sessions = [.. date.Activities.Select(activity => activity.Session).OfType<DaySession>()],

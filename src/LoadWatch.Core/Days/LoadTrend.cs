@@ -23,6 +23,7 @@ internal sealed class LoadTrend(LocalDate? firstCovered = null)
     private readonly RunningMedian chronicMedian = new();
     private readonly WeightedAverage acuteAverage = new(7);
     private readonly WeightedAverage chronicAverage = new(28);
+    private readonly WeekTrend weeks = new();
     private LocalDate? firstCovered = firstCovered;
 
     /// <summary>The trends as they stood on the last of some days: all of them, or the last <see cref="LoadCalendar.LookBackDays"/>.</summary>
@@ -39,6 +40,7 @@ internal sealed class LoadTrend(LocalDate? firstCovered = null)
         {
             trend.loads.Add(day.Load);
             trend.Learn(day.Chronic);
+            trend.weeks.Learn(day);
         }
 
         trend.acuteAverage.GoOnFrom(last.EwmaAcute);
@@ -52,7 +54,7 @@ internal sealed class LoadTrend(LocalDate? firstCovered = null)
         loads.Add(day.Load);
         firstCovered ??= day.Load.HasValue ? day.Date : null;
         var covered = firstCovered <= day.Date ? Period.DaysBetween(firstCovered.Value, day.Date) : (int?)null;
-        return WithMedian(WithSpread(WithAverages(WithWeeks(day with { DaysSinceFirstCovered = covered }))));
+        return weeks.Add(WithMedian(WithSpread(WithAverages(WithWeeks(day with { DaysSinceFirstCovered = covered })))));
     }
 
     private ReadOnlySpan<double?> Loads => CollectionsMarshal.AsSpan(loads);

@@ -15,9 +15,6 @@ namespace LoadWatch.Findings;
 /// </summary>
 public sealed class StimulusLowRule : IRule
 {
-    private const int Window = 14;
-    private const int UsualDays = 56;
-
     /// <summary>Readable dates in a row before it is raised: one visit a day late raises nothing. A choice.</summary>
     private const int OnDays = 3;
 
@@ -34,6 +31,8 @@ public sealed class StimulusLowRule : IRule
     {
         var series = subject.Days.Select(day => day.Regions.GetValueOrDefault(region, RegionDay.NotCovered)).ToList();
         var first = series.FindIndex(day => day.DaysSince.HasValue);
+        var tally = new HeavyTally();
+        series.ForEach(day => tally.Add(day.HeavyOrFast));
         var key = $"{Name}/{BodyRegions.Word(region)}";
         var run = new FindingRun<Count>(OnDays, subject.Memory.Before<RunState<Count>>(key));
         for (var index = Math.Max(first, subject.First); first >= 0 && index < series.Count; index++)
@@ -43,7 +42,7 @@ public sealed class StimulusLowRule : IRule
             {
                 run.End();
             }
-            else if (index - first >= subject.Limits.StimulusLow.HistoryDays && !(run.Since is null && TheGapTellsIt(subject, day, series[index])) && Read(subject, series, first, index) is { } count)
+            else if (index - first >= subject.Limits.StimulusLow.HistoryDays && !(run.Since is null && TheGapTellsIt(subject, day, series[index])) && Read(subject, tally, index) is { } count)
             {
                 run.Read(day.Date, count, count.IsLow, count.IsLow);
             }
@@ -65,32 +64,19 @@ public sealed class StimulusLowRule : IRule
     private static bool TheGapTellsIt(RuleSubject subject, Day day, RegionDay region) =>
         region.DaysSince >= StimulusGapLimit.For(subject.Person.AgeOn(day.Date), region, subject.Limits.StimulusGap).NoticeDays;
 
-    private static Count? Read(RuleSubject subject, List<RegionDay> series, int first, int index)
+    private static Count? Read(RuleSubject subject, HeavyTally tally, int index)
     {
         var limits = subject.Limits.StimulusLow;
-        var (heavy, known) = Heavy(series, index - Window + 1, index);
-        if (known < Significant.Round(limits.CoveredShare * Window))
+        var (heavy, known) = tally.Among(index, HeavyTally.WindowDays);
+        if (known < Significant.Round(limits.CoveredShare * HeavyTally.WindowDays))
         {
             return null;
         }
 
-        var (before, knownBefore) = Heavy(series, Math.Max(first, index - Window - UsualDays + 1), index - Window);
-        var usual = knownBefore < Significant.Round(limits.CoveredShare * UsualDays) ? (double?)null : Significant.Round((double)before / knownBefore * Window);
+        var usual = tally.Usual(index, limits.CoveredShare);
         var age = subject.Person.AgeOn(subject.Days[index].Date);
         var floor = age >= limits.OlderFrom ? limits.OlderFloorDays : limits.FloorDays;
         return new Count(subject.Days[index].Date, heavy, known, usual, age, floor, Math.Max(floor, Significant.Round(limits.UsualShare * (usual ?? 0))));
-    }
-
-    private static (int Heavy, int Known) Heavy(List<RegionDay> series, int from, int to)
-    {
-        var (heavy, known) = (0, 0);
-        for (var index = Math.Max(0, from); index <= to; index++)
-        {
-            heavy += series[index].HeavyOrFast is true ? 1 : 0;
-            known += series[index].HeavyOrFast.HasValue ? 1 : 0;
-        }
-
-        return (heavy, known);
     }
 
     private Finding Find(RuleSubject subject, Day day, BodyRegion region, LocalDate since, Count count) => new(

@@ -1,9 +1,9 @@
 // The usual week: the median of a person's ordinary weeks. A week is ordinary when enough of it is known, it holds some load and none of its days is set
 // aside by plan or answers (light week, off-season, travel, absence, return). All a choice.
-using LoadWatch.Days;
+using LoadWatch.Plans;
 using NodaTime;
 
-namespace LoadWatch.Findings;
+namespace LoadWatch.Days;
 
 /// <summary>Seven days in a row.</summary>
 /// <param name="UpTo">Its last date.</param>
@@ -29,17 +29,9 @@ internal readonly record struct PastWeek(LocalDate UpTo, double? Load, bool IsSe
         }
     }
 
-    /// <summary>Null without any.</summary>
-    public static double? Median(IEnumerable<PastWeek> weeks)
-    {
-        var median = new RunningMedian();
-        foreach (var week in weeks)
-        {
-            median.Add(week.Load);
-        }
-
-        return median.Value;
-    }
+    /// <param name="isSetAside">One of its days is.</param>
+    public static PastWeek EndingWith(Day last, bool isSetAside, int coveredOf7) =>
+        new(last.Date, Math.Round(last.Coverage7 * Length) >= coveredOf7 ? last.Acute : null, isSetAside);
 
     private static PastWeek EndingAt(IReadOnlyList<Day> days, int index, int coveredOf7)
     {
@@ -49,7 +41,6 @@ internal readonly record struct PastWeek(LocalDate UpTo, double? Load, bool IsSe
             aside = aside || days[at].Plan.IsSetAside();
         }
 
-        var last = days[index];
-        return new PastWeek(last.Date, Math.Round(last.Coverage7 * Length) >= coveredOf7 ? last.Acute : null, aside);
+        return EndingWith(days[index], aside, coveredOf7);
     }
 }
