@@ -29,9 +29,10 @@ internal readonly record struct PastWeek(LocalDate UpTo, double? Load, bool IsSe
         }
     }
 
+    /// <param name="acute">Its load as the last of its days tells it.</param>
     /// <param name="isSetAside">One of its days is.</param>
-    public static PastWeek EndingWith(Day last, bool isSetAside, int coveredOf7) =>
-        new(last.Date, Math.Round(last.Coverage7 * Length) >= coveredOf7 ? last.Acute : null, isSetAside);
+    public static PastWeek EndingOn(LocalDate date, double? acute, double coverage7, bool isSetAside, int coveredOf7) =>
+        new(date, Math.Round(coverage7 * Length) >= coveredOf7 ? acute : null, isSetAside);
 
     private static PastWeek EndingAt(IReadOnlyList<Day> days, int index, int coveredOf7)
     {
@@ -41,6 +42,6 @@ internal readonly record struct PastWeek(LocalDate UpTo, double? Load, bool IsSe
             aside = aside || days[at].Plan.IsSetAside();
         }
 
-        return EndingWith(days[index], aside, coveredOf7);
+        return EndingOn(days[index].Date, days[index].Acute, days[index].Coverage7, aside, coveredOf7);
     }
 }

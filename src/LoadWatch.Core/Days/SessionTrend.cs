@@ -1,6 +1,6 @@
 namespace LoadWatch.Days;
 
-/// <summary>The largest sessions of the last 30 days. Takes every date in order, with its sessions, oldest first.</summary>
+/// <summary>The largest sessions of the last 30 days. Takes the sessions of every date in order, oldest first.</summary>
 internal sealed class SessionTrend
 {
     private const int Days = 30;
@@ -19,15 +19,16 @@ internal sealed class SessionTrend
         return trend;
     }
 
-    public Day Add(Day day)
+    /// <returns>By load, and the longest run in metres; each null where there is none.</returns>
+    public (double? Load, double? Run) Add(IReadOnlyList<DaySession> sessions)
     {
-        largest.Add(SessionSize.Largest(day.Sessions));
+        largest.Add(SessionSize.Largest(sessions));
         (double? Load, double? Run) found = (null, null);
         for (var index = Math.Max(0, largest.Count - Days); index < largest.Count; index++)
         {
             found = (SessionSize.Larger(found.Load, largest[index].Load), SessionSize.Larger(found.Run, largest[index].Run));
         }
 
-        return day with { LargestSession30 = found.Load, LongestRunMetres30 = found.Run };
+        return found;
     }
 }

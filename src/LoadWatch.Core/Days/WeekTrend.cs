@@ -1,8 +1,9 @@
 using LoadWatch.Plans;
+using NodaTime;
 
 namespace LoadWatch.Days;
 
-/// <summary>One person's weeks against those before them. Takes every date in order, with its load trends, oldest first.</summary>
+/// <summary>One person's weeks against those before them. Takes every date in order, oldest first.</summary>
 internal sealed class WeekTrend
 {
     private const int WeekDays = 7;
@@ -17,18 +18,22 @@ internal sealed class WeekTrend
     private readonly List<PastWeek> weeks = [];
     private int lastSetAside = -WeekDays;
 
-    public Day Add(Day day)
+    /// <param name="acute">Load of the 7 days that end with the date.</param>
+    /// <param name="coverage7">Share of them with known load.</param>
+    /// <returns>The usual week and the change against the last ordinary one, fraction; each null where it is not known.</returns>
+    public (double? Usual, double? Change) Add(LocalDate date, double? acute, double coverage7, DayPlan plan)
     {
-        Learn(day);
-        var change = WeekChange.Of(weeks[^1].Load, Before());
-        return day with { UsualWeek = UsualWeek.Of(Before(), UsualWeeks, WeeksWanted)?.Load, WeeklyChangeOrdinary = change?.Fraction };
+        Learn(date, acute, coverage7, plan);
+        return (UsualWeek.Of(Before(), UsualWeeks, WeeksWanted)?.Load, WeekChange.Of(weeks[^1].Load, Before())?.Fraction);
     }
 
     /// <summary>A day before the first date.</summary>
-    public void Learn(Day day)
+    public void Learn(Day day) => Learn(day.Date, day.Acute, day.Coverage7, day.Plan);
+
+    private void Learn(LocalDate date, double? acute, double coverage7, DayPlan plan)
     {
-        lastSetAside = day.Plan.IsSetAside() ? weeks.Count : lastSetAside;
-        weeks.Add(PastWeek.EndingWith(day, weeks.Count - lastSetAside < WeekDays, KnownOf7));
+        lastSetAside = plan.IsSetAside() ? weeks.Count : lastSetAside;
+        weeks.Add(PastWeek.EndingOn(date, acute, coverage7, weeks.Count - lastSetAside < WeekDays, KnownOf7));
     }
 
     private IEnumerable<PastWeek> Before()

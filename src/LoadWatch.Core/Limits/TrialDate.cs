@@ -60,11 +60,11 @@ internal sealed class TrialDate
             Memory = new RuleMemory(Row(rule)),
             SessionLoads = new Dictionary<string, double?>(bare.SessionLoads!, StringComparer.Ordinal) { [Key] = load },
         };
-        return rule.Evaluate(subject).Any(finding => finding is { Quantity: null, Unit: not "matches" });
+        return rule.Evaluate(subject).Any(finding => finding is { Quantity: null, Unit: not "matches", Severity: Severity.Notice or Severity.Warning });
     }
 
     /// <summary>A row of hard days goes on from the days before; all else is read afresh.</summary>
-    private Carried Row(IRule rule) => rule is HardDaysRule ? before[^1].Carried : Carried.Nothing;
+    private Carried Row(IRule rule) => rule is HardDaysRule hard ? hard.RowAlone(before[^1].Carried) : Carried.Nothing;
 
     private static RuleLimits Undelayed(RuleLimits limits) => limits with { WeeklyJump = limits.WeeklyJump with { OnDays = 1 } };
 
