@@ -80,7 +80,7 @@ public sealed class DaysFromAnyDateTests
     public void TheHistoriesHoldFindingsOfEveryRule()
     {
         var last = RandomHistory.First.PlusDays(RandomHistory.Days - 1);
-        var found = Enumerable.Range(0, 8)
+        var found = Enumerable.Range(0, 20)
             .Select(number => new RandomHistory((uint)number))
             .SelectMany(history => PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes()).Findings)
             .ToList();
