@@ -10,6 +10,7 @@ using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Stimulus;
 using NodaTime;
+using NodaTime.Text;
 
 namespace LoadWatch.Service.Configuration;
 
@@ -56,7 +57,10 @@ public sealed class ConfigurationReader
         faults.Stop();
 
         var roster = faults.Collect(() => RosterReader.Read(Resolve(file.Roster), file.Roster, groups.Keys.ToList(), zone));
-        var people = (roster ?? []).ToDictionary(person => person.Id, StringComparer.OrdinalIgnoreCase);
+        var people = (roster ?? []).ToDictionary(
+            person => person.Id,
+            person => groups.TryGetValue(person.Group, out var group) ? person with { DayBeginsAt = group.DayBeginsAt } : person,
+            StringComparer.OrdinalIgnoreCase);
         var anchors = faults.Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList()));
         var devices = faults.Collect(() => roster is null || !HasDevices(file) ? DeviceBook.Empty : DevicesReader.Read(Resolve(file.Devices), file.Devices, people));
         var limits = LimitsOfPeople(json, file, people, roster is not null);
@@ -143,6 +147,7 @@ public sealed class ConfigurationReader
             var group = new Group(entry.Id, entry.Name.Length > 0 ? entry.Name : entry.Id, entry.LoadQuantity, limits[i])
             {
                 LoadFallbacks = entry.LoadFallbacks,
+                DayBeginsAt = LocalTimePattern.CreateWithInvariantCulture("HH:mm").Parse(entry.DayBeginsAt).Value,
             };
             if (!groups.TryAdd(entry.Id, group))
             {

@@ -129,6 +129,10 @@ public sealed record GroupEntry
     /// </summary>
     public IReadOnlyList<string> LoadFallbacks { get; init; } = [];
 
+    /// <summary>Local time at which a day begins, 00:00 to 12:00: sessions that begin before it count for the date before.</summary>
+    [RegularExpression("^(0[0-9]|1[01]):[0-5][0-9]$|^12:00$", ErrorMessage = "is not a time from 00:00 to 12:00")]
+    public string DayBeginsAt { get; init; } = "00:00";
+
     /// <summary>Limits that differ from the common ones; only the keys that differ.</summary>
     public RuleLimits? Limits { get; init; }
 }

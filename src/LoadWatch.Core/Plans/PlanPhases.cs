@@ -1,6 +1,5 @@
-using LoadWatch.Plans;
 
-namespace LoadWatch.Findings;
+namespace LoadWatch.Plans;
 
 /// <summary>What plan and answers mean to the rules of load.</summary>
 internal static class PlanPhases
