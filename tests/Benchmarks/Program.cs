@@ -6,6 +6,7 @@ using LoadWatch.Benchmarks.Imports;
 // dotnet run -c Release --project tests/Benchmarks -- import
 // dotnet run -c Release --project tests/Benchmarks -- worst
 // dotnet run -c Release --project tests/Benchmarks -- compute
+// dotnet run -c Release --project tests/Benchmarks -- decode
 if (args is [ImportBenchmark.Name, .. var rest])
 {
     return ImportBenchmark.Run(rest);
@@ -19,6 +20,11 @@ if (args is [WorstFiles.Name])
 if (args is [ComputeSpeed.Name])
 {
     return ComputeSpeed.Run();
+}
+
+if (args is [DecodeTable.Name])
+{
+    return DecodeTable.Run();
 }
 
 BenchmarkSwitcher.FromAssembly(typeof(Program).Assembly).Run(args);
