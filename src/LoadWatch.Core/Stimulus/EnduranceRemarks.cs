@@ -63,7 +63,7 @@ internal static class EnduranceRemarks
     {
         if (usable[Channel.Power] is not null && capacity is null)
         {
-            yield return usable.Recording.Sport.IsOnFoot
+            yield return SessionStimulus.ReadsSpeed(usable.Recording.Sport)
                 ? "power on foot is a model of the watch and is not read"
                 : "power: no critical_power to read it against";
         }

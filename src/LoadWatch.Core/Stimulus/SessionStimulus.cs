@@ -25,7 +25,7 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
             : OfSport(usable, date, person, anchors, settings.Sports);
     }
 
-    /// <summary>Where speed is a body's own running or walking.</summary>
+    /// <summary>Where speed is a body's own running or walking, and power a watch's model of it.</summary>
     internal static bool ReadsSpeed(Sport sport) => sport.IsOnFoot || sport.IsTeamSport;
 
     private static SessionStimulus OfSport(
@@ -36,7 +36,7 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
         IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> sports)
     {
         var sport = usable.Recording.Sport;
-        var power = sport.IsOnFoot ? null : PowerCapacity.On(date, person.Id, anchors);
+        var power = ReadsSpeed(sport) ? null : PowerCapacity.On(date, person.Id, anchors);
         var speed = ReadsSpeed(sport) ? SpeedCapacity.On(date, person.Id, anchors) : null;
         if (SportRegions.Of(sport, sports) is { } regions)
         {
