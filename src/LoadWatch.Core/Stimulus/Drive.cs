@@ -28,6 +28,6 @@ public static class Drive
 
         return balance <= 0
             ? 1
-            : Math.Min(1, criticalDrive + ((1 - criticalDrive) * (intensity - critical) / ((max - critical) * balance)));
+            : Math.Min(1, criticalDrive + ((1 - criticalDrive) * (intensity - critical) / (AvailablePower.Watts(critical, max, balance) - critical)));
     }
 }
