@@ -3,7 +3,7 @@ using System.ComponentModel.DataAnnotations;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>falling_capacity</c>: the best of the last weeks is below the best of the weeks before.</summary>
-public sealed record FallingCapacityLimits
+public sealed record FallingCapacityLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;

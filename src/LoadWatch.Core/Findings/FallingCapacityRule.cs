@@ -17,7 +17,7 @@ public sealed class FallingCapacityRule : IRule
 {
     public string Name => "falling_capacity";
 
-    public bool IsEnabled(RuleLimits limits) => limits.FallingCapacity.Enabled;
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.FallingCapacity;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {

@@ -4,7 +4,7 @@ using System.Text.Json.Serialization;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>falling_load</c>: the usual load is fading. All a choice; 0.34 has a basis in studies of reduced volume.</summary>
-public sealed record FallingLoadLimits
+public sealed record FallingLoadLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;

@@ -21,7 +21,7 @@ public sealed class FallingLoadRule : IRule
 
     public string Name => "falling_load";
 
-    public bool IsEnabled(RuleLimits limits) => limits.FallingLoad.Enabled;
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.FallingLoad;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) => WatchedSeries.Of(subject, subject.Limits.FallingLoad.Quantities)
         .SelectMany(series => Evaluate(subject, series, subject.Limits.FallingLoad))

@@ -3,7 +3,7 @@ using System.ComponentModel.DataAnnotations;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>function_test</c>: falls that are more than the error of the test. From memory, not re-read; configurable for that reason.</summary>
-public sealed record FunctionTestLimits
+public sealed record FunctionTestLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;

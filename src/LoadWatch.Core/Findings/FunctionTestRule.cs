@@ -15,7 +15,7 @@ public sealed class FunctionTestRule : IRule
 
     public string Name => RuleName;
 
-    public bool IsEnabled(RuleLimits limits) => limits.FunctionTest.Enabled;
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.FunctionTest;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) =>
         FunctionTests.All.SelectMany(test => Evaluate(subject, test)).OrderBy(finding => finding.Date);

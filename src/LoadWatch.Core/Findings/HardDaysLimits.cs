@@ -3,7 +3,7 @@ using System.ComponentModel.DataAnnotations;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>hard_days</c>: too many hard days in a row, or too many matches close together. All a choice.</summary>
-public sealed record HardDaysLimits
+public sealed record HardDaysLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;

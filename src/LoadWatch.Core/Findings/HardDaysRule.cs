@@ -14,7 +14,7 @@ public sealed class HardDaysRule : IRule
 {
     public string Name => "hard_days";
 
-    public bool IsEnabled(RuleLimits limits) => limits.HardDays.Enabled;
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.HardDays;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {

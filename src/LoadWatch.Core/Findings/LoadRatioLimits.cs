@@ -4,7 +4,7 @@ using System.Text.Json.Serialization;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>load_ratio</c>: acute load well above the usual, uncoupled.</summary>
-public sealed record LoadRatioLimits
+public sealed record LoadRatioLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;

@@ -19,7 +19,7 @@ public sealed class LoadRatioRule : IRule
 
     public string Name => "load_ratio";
 
-    public bool IsEnabled(RuleLimits limits) => limits.LoadRatio.Enabled;
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.LoadRatio;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) => WatchedSeries.Of(subject, subject.Limits.LoadRatio.Quantities)
         .SelectMany(series => Evaluate(subject, series, subject.Limits.LoadRatio))

@@ -3,7 +3,7 @@ using System.ComponentModel.DataAnnotations;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>monotony</c>: a heavy week without variation.</summary>
-public sealed record MonotonyLimits
+public sealed record MonotonyLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;

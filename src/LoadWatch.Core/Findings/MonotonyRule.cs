@@ -15,7 +15,7 @@ public sealed class MonotonyRule : IRule
 {
     public string Name => "monotony";
 
-    public bool IsEnabled(RuleLimits limits) => limits.Monotony.Enabled;
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.Monotony;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {

@@ -3,7 +3,7 @@ using System.ComponentModel.DataAnnotations;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>not_usable</c>: recordings came, but too little of them can be used. All a choice.</summary>
-public sealed record NotUsableLimits
+public sealed record NotUsableLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;

@@ -13,7 +13,7 @@ public sealed class NotUsableRule : IRule
 
     public string Name => "not_usable";
 
-    public bool IsEnabled(RuleLimits limits) => limits.NotUsable.Enabled;
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.NotUsable;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {

@@ -3,7 +3,7 @@ using System.ComponentModel.DataAnnotations;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>silence</c>: expected recordings did not come, by the rhythm of the person's own recordings. All a choice.</summary>
-public sealed record SilenceLimits
+public sealed record SilenceLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;

@@ -13,7 +13,7 @@ public sealed class SilenceRule : IRule
 {
     public string Name => "silence";
 
-    public bool IsEnabled(RuleLimits limits) => limits.Silence.Enabled;
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.Silence;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {

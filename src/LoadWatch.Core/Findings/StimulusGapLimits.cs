@@ -3,7 +3,7 @@ using System.ComponentModel.DataAnnotations;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>stimulus_gap</c>: too long without heavy or fast work of a body region. All a choice.</summary>
-public sealed record StimulusGapLimits
+public sealed record StimulusGapLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;

@@ -17,7 +17,7 @@ public sealed class StimulusGapRule : IRule
 
     public string Name => "stimulus_gap";
 
-    public bool IsEnabled(RuleLimits limits) => limits.StimulusGap.Enabled;
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.StimulusGap;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) =>
         Regions.SelectMany(region => Evaluate(subject, region, subject.Limits.StimulusGap)).OrderBy(finding => finding.Date);

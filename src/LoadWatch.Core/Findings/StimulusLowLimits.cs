@@ -3,7 +3,7 @@ using System.ComponentModel.DataAnnotations;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>stimulus_low</c>: too few heavy-or-fast days of a body region in 14 days. All a choice.</summary>
-public sealed record StimulusLowLimits
+public sealed record StimulusLowLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;

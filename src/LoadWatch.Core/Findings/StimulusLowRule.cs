@@ -25,7 +25,7 @@ public sealed class StimulusLowRule : IRule
 
     public string Name => "stimulus_low";
 
-    public bool IsEnabled(RuleLimits limits) => limits.StimulusLow.Enabled;
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.StimulusLow;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) =>
         Regions.SelectMany(region => Evaluate(subject, region)).OrderBy(finding => finding.Date);

@@ -4,7 +4,7 @@ using System.Text.Json.Serialization;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>weekly_jump</c>: this week far above the last ordinary one. All a choice.</summary>
-public sealed record WeeklyJumpLimits
+public sealed record WeeklyJumpLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;

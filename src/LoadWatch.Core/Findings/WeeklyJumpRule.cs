@@ -18,7 +18,7 @@ public sealed class WeeklyJumpRule : IRule
 
     public string Name => "weekly_jump";
 
-    public bool IsEnabled(RuleLimits limits) => limits.WeeklyJump.Enabled;
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.WeeklyJump;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) => WatchedSeries.Of(subject, subject.Limits.WeeklyJump.Quantities)
         .SelectMany(series => Evaluate(subject, series, subject.Limits.WeeklyJump))

@@ -79,8 +79,8 @@ public class RuleBookTests
             new() { FunctionTest = new() { Enabled = false } },
         ];
 
-        Assert.All(RuleBook.All, rule => Assert.True(rule.IsEnabled(Watched.Defaults)));
-        Assert.Equal(RuleBook.All.Select(rule => rule.Name), off.Select(limits => Assert.Single(RuleBook.All, rule => !rule.IsEnabled(limits)).Name));
+        Assert.All(RuleBook.All, rule => Assert.True(rule.LimitsOf(Watched.Defaults).Enabled));
+        Assert.Equal(RuleBook.All.Select(rule => rule.Name), off.Select(limits => Assert.Single(RuleBook.All, rule => !rule.LimitsOf(limits).Enabled).Name));
     }
 
     [Fact]
