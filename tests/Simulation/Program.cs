@@ -10,6 +10,12 @@ public static class Program
 {
     public static int Main(string[] args)
     {
+        if (args.Contains("--tune"))
+        {
+            Tune.Run(args[^1]);
+            return 0;
+        }
+
         var seed = int.Parse(args.SkipWhile(word => word != "--seed").Skip(1).FirstOrDefault() ?? "1", CultureInfo.InvariantCulture);
         foreach (var habits in new[] { Habits.Squad, Habits.Runners, Habits.Clinic })
         {

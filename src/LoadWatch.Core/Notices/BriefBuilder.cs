@@ -40,8 +40,8 @@ public static class BriefBuilder
         };
     }
 
-    /// <summary>Standing and told: one that is shelved is not.</summary>
-    internal static bool IsActive(AlertNews news) => AlertLife.IsActive(news.Alert.State) && news.Alert.ShelvedUntil is null;
+    /// <summary>Standing and told: one that is shelved or suppressed is not.</summary>
+    internal static bool IsActive(AlertNews news) => news.Alert.IsTold;
 
     /// <summary>Active alerts, warnings first, then by rule and region.</summary>
     internal static IEnumerable<AlertNews> Active(BriefSubject subject) => subject.Alerts

@@ -114,7 +114,8 @@ public static class RuleTexts
     public static string Returned(AlertNews news, RuleLimits limits, DayPlan plan, bool self)
     {
         var key = news.Alert.Key;
-        return news.Corrected ? $"{Named(key, self)}: corrected by a later file"
+        return AlertEndings.Of(news) is { } ending ? $"{Named(key, self)}: {ending}"
+            : news.Corrected ? $"{Named(key, self)}: corrected by a later file"
             : Pause(key.Rule, plan) is { } pause ? $"{Named(key, self)}: not watched {pause}"
             : Returned(key, limits, self);
     }

@@ -1,4 +1,5 @@
 using LoadWatch.Alerts;
+using LoadWatch.Findings;
 using LoadWatch.Simulation.Nights;
 using LoadWatch.Simulation.Worlds;
 using NodaTime;
@@ -11,16 +12,21 @@ public static class Score
     private const int ChatterDays = 7;
     private const int ChatterChanges = 3;
 
-    /// <summary>Alerts of the counted days that nothing true explains.</summary>
-    public static IReadOnlyList<Alert> FalseAlerts(SeasonResult season) =>
+    /// <summary>Every time within the counted days that an alert was raised, the first time or again, with nothing true to explain it.</summary>
+    public static IReadOnlyList<Raise> FalseAlerts(SeasonResult season) =>
     [
-        .. season.People.SelectMany(person => person.Alerts
-            .Where(alert => alert.Raised >= season.World.Counted)
-            .Where(alert => !person.Truth.Happenings.Any(one => Explains(one, alert)))),
+        .. season.People.SelectMany(person => Raises(person)
+            .Where(raise => raise.Date >= season.World.Counted)
+            .Where(raise => !person.Truth.Happenings.Any(one => Explains(one, raise)))),
     ];
 
     public static double FalsePerPersonAnd100Days(SeasonResult season) =>
         100.0 * FalseAlerts(season).Count / season.People.Count / season.World.CountedDays;
+
+    /// <summary>How often an alert was raised.</summary>
+    public static IEnumerable<Raise> Raises(PersonNights person) => person.Changes
+        .Where(change => change.Reason is AlertChangeReason.Raised or AlertChangeReason.RaisedAgain)
+        .Select(change => new Raise(person.AlertOf(change.AlertId).Key, change.Date));
 
     /// <summary>By kind of episode: how many there were, how many were found, and after how many days.</summary>
     public static IReadOnlyList<Found> Episodes(SeasonResult season) =>
@@ -54,12 +60,14 @@ public static class Score
         _ => 0,
     };
 
-    private static LocalDate? FirstAlert(PersonNights person, Happening episode) => person.Alerts
-        .Where(alert => Fits(episode.Kind, alert.Key.Rule) && alert.Raised >= episode.From && alert.Raised <= episode.To.PlusDays(Patience(episode.Kind)))
-        .Min(alert => (LocalDate?)alert.Raised);
+    private static LocalDate? FirstAlert(PersonNights person, Happening episode) => Finds(person, episode).Min(raise => (LocalDate?)raise.Date);
 
-    private static bool Explains(Happening happening, Alert alert) =>
-        Fits(happening.Kind, alert.Key.Rule) && alert.Raised >= happening.From && alert.Raised <= happening.To.PlusDays(14);
+    /// <summary>Alerts that tell of an episode while it is time.</summary>
+    public static IEnumerable<Raise> Finds(PersonNights person, Happening episode) => Raises(person)
+        .Where(raise => Fits(episode.Kind, raise.Key.Rule) && raise.Date >= episode.From && raise.Date <= episode.To.PlusDays(Patience(episode.Kind)));
+
+    private static bool Explains(Happening happening, Raise raise) =>
+        Fits(happening.Kind, raise.Key.Rule) && raise.Date >= happening.From && raise.Date <= happening.To.PlusDays(14);
 
     private static bool Fits(HappeningKind kind, string rule) => kind switch
     {
@@ -79,3 +87,6 @@ public static class Score
 
 /// <param name="MedianDays">From the first date of the episode to the date on which the alert was raised; null where none was found.</param>
 public sealed record Found(HappeningKind Kind, int Episodes, int Times, int? MedianDays);
+
+/// <summary>An alert was raised on a date.</summary>
+public readonly record struct Raise(FindingKey Key, LocalDate Date);

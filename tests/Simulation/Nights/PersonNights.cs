@@ -17,8 +17,7 @@ namespace LoadWatch.Simulation.Nights;
 /// One person's nights by the service's own days, rules and alerts, in memory: every night takes in what has come by then, computes again from the first date that it
 /// changes, and judges alerts at the date that is over.
 /// </summary>
-/// <param name="fromNothing">Every night forgets what it computed, as after a rebuild or on another machine.</param>
-public sealed class PersonNights(TruePerson truth, Group group, Sport sport, bool fromNothing = false)
+public sealed class PersonNights(TruePerson truth, Group group, Sport sport, Course course)
 {
     private readonly List<(LocalDate ArrivesOn, JoinedActivity Activity)> recordings = [.. truth.Sessions.Where(session => session.Recorded is not null).Select(session => Recording(session, group, sport))];
     private readonly List<Day> days = [];
@@ -54,7 +53,16 @@ public sealed class PersonNights(TruePerson truth, Group group, Sport sport, boo
             plan = PlanOf(told);
         }
 
-        Compute(fromNothing ? LocalDate.MinIsoValue : dirty.PlusDays(-LoadCalendar.SettledDaysBack), date);
+        if (course.KnownThrough is not { } through)
+        {
+            Compute(course.FromNothing ? LocalDate.MinIsoValue : dirty.PlusDays(-LoadCalendar.SettledDaysBack), date);
+        }
+        else if (lastNight is null)
+        {
+            plan = PlanOf(truth.Told);
+            Compute(LocalDate.MinIsoValue, through);
+        }
+
         lastNight = date;
         Take(AlertReview.Review(
             truth.Person.Id,
@@ -67,6 +75,14 @@ public sealed class PersonNights(TruePerson truth, Group group, Sport sport, boo
 
     /// <summary>Staff say that they have seen an alert.</summary>
     public void Acknowledge(string id, LocalDate date) => Take(AlertReview.Acknowledge(alerts[id], date, known => sequences.GetValueOrDefault(known)));
+
+    public void AcknowledgeAll(LocalDate date)
+    {
+        foreach (var id in alerts.Values.Where(alert => !AlertLife.IsAcknowledged(alert.State)).Select(alert => alert.Id).ToList())
+        {
+            Acknowledge(id, date);
+        }
+    }
 
     private void Compute(LocalDate from, LocalDate to)
     {
@@ -105,7 +121,7 @@ public sealed class PersonNights(TruePerson truth, Group group, Sport sport, boo
         }
     }
 
-    private static PersonPlan PlanOf(List<Told> told) => new()
+    private static PersonPlan PlanOf(IEnumerable<Told> told) => new()
     {
         Entries = [.. told.Select(one => one.Entry).OfType<PlanEntry>().OrderBy(entry => entry.From)],
         Absences = [.. told.Select(one => one.Absence).OfType<Absence>().OrderBy(absence => absence.From)],

@@ -15,14 +15,18 @@ public static class Season
     public static SeasonResult Of(World world, Sport sport, Course? course = null)
     {
         var how = course ?? new Course();
-        var people = world.People.Select(person => new PersonNights(person, world.Group, sport, how.FromNothing)).ToList();
+        var people = world.People.Select(person => new PersonNights(person, world.Group, sport, how)).ToList();
         var contact = new Contact(
             "contact", "Contact", ContactRole.Coach, [world.Group.Id], [], people[0].Truth.Person.Zone, new LocalTime(6, 30), Enum.GetValues<IsoDayOfWeek>().Where(day => day != IsoDayOfWeek.None).ToHashSet());
         var briefs = new List<Brief>();
         foreach (var date in Dates(world, how))
         {
             people.AsParallel().ForAll(person => person.Pass(date));
-            if (date >= world.Counted)
+            if (how.KnownThrough is not null)
+            {
+                people.ForEach(person => person.AcknowledgeAll(date));
+            }
+            else if (date >= world.Counted)
             {
                 var morning = date.PlusDays(1);
                 var brief = BriefBuilder.Build(contact, morning, [.. people.Select(person => Subject(person, world.Group, date))], []);
@@ -82,6 +86,9 @@ public sealed record Course
 {
     /// <summary>Every night begins from what came in, with nothing computed before.</summary>
     public bool FromNothing { get; init; }
+
+    /// <summary>Everything up to this date is known from the first night on, so that days are computed once: a quick look at limits.</summary>
+    public LocalDate? KnownThrough { get; init; }
 
     /// <summary>Sweeps a night: the second finds nothing new.</summary>
     public int TimesANight { get; init; } = 1;
