@@ -7,6 +7,9 @@ public interface IRule
     /// <summary>Lower-case words joined by underscores; part of alert ids.</summary>
     string Name { get; }
 
+    /// <summary>Why it may ask for attention.</summary>
+    RuleRecord Record { get; }
+
     /// <summary>Its own among the limits.</summary>
     IRuleLimits LimitsOf(RuleLimits limits);
 

@@ -17,6 +17,8 @@ public enum PlannedState
 /// <summary>Which planned state turns which rule off. The rules and what is printed of them go by this one table. A choice.</summary>
 public static class PlanMutes
 {
+    private static readonly PlannedState[] All = Enum.GetValues<PlannedState>();
+
     private static readonly PlannedState[] Away = [PlannedState.Absent, PlannedState.Returning];
 
     private static readonly Dictionary<string, PlannedState[]> Table = new(StringComparer.Ordinal)
@@ -28,6 +30,7 @@ public static class PlanMutes
         ["stimulus_low"] = [.. Away, PlannedState.LightWeek, PlannedState.OffSeason],
         ["falling_capacity"] = [.. Away, PlannedState.OffSeason],
         ["silence"] = [PlannedState.Absent],
+        ["test_overdue"] = [PlannedState.Absent],
     };
 
     /// <summary>The states that turn a rule off; none for a rule that is always watched.</summary>
@@ -57,7 +60,10 @@ public static class PlanMutes
         _ => throw new ArgumentOutOfRangeException(nameof(state)),
     };
 
-    private static bool Holds(PlannedState state, DayPlan plan) => state switch
+    /// <summary>Whether any planned state holds.</summary>
+    internal static bool HoldsAny(DayPlan plan) => Array.Exists(All, state => Holds(state, plan));
+
+    internal static bool Holds(PlannedState state, DayPlan plan) => state switch
     {
         PlannedState.Absent => plan.Absence is not null,
         PlannedState.Returning => plan.ReturnDay is not null || plan.IsIn(PlanWord.Returning),

@@ -7,8 +7,7 @@ namespace LoadWatch.Findings;
 /// <summary>Every rule, in the order in which they are described.</summary>
 public static class RuleBook
 {
-    public static IReadOnlyList<IRule> All { get; } =
-    [
+    public static IReadOnlyList<IRule> All { get; } = Registered(
         new LoadRatioRule(),
         new WeeklyJumpRule(),
         new SessionSpikeRule(),
@@ -21,7 +20,21 @@ public static class RuleBook
         new SilenceRule(),
         new NotUsableRule(),
         new FunctionTestRule(),
-    ];
+        new TestOverdueRule());
+
+    /// <summary>A rule that does not say why it may ask for attention is refused.</summary>
+    /// <exception cref="ArgumentException">A record has a blank part, or two rules share a name or a rank.</exception>
+    public static IReadOnlyList<IRule> Registered(params IReadOnlyList<IRule> rules)
+    {
+        var faults = rules.SelectMany(rule => rule.Record.Missing(rule.Name).Select(field => $"{rule.Name} has no {field}"))
+            .Concat(Twice(rules, rule => $"name {rule.Name}"))
+            .Concat(Twice(rules, rule => $"rank {rule.Record.Rank}"))
+            .ToList();
+        return faults.Count == 0 ? rules : throw new ArgumentException(string.Join("; ", faults), nameof(rules));
+    }
+
+    private static IEnumerable<string> Twice(IReadOnlyList<IRule> rules, Func<IRule, string> of) =>
+        rules.GroupBy(of, StringComparer.Ordinal).Where(same => same.Count() > 1).Select(same => $"{same.Key} stands twice");
 
     /// <summary>Those that read loads, which hang on reference values; what counted as heavy or fast on its date stays so.</summary>
     public static IReadOnlyList<IRule> OfLoad { get; } =

@@ -16,6 +16,8 @@ public sealed class SessionSpikeRule : IRule
 
     private string KeyOfRuns => $"{Name}/{QuantityNames.Distance}";
 
+    public RuleRecord Record { get; } = new SessionSpikeRecord();
+
     public IRuleLimits LimitsOf(RuleLimits limits) => limits.SessionSpike;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject)

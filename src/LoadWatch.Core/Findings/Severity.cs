@@ -11,3 +11,9 @@ public enum Severity
     Notice,
     Warning,
 }
+
+/// <summary>As what a rule raises, as a severity.</summary>
+internal static class RaisedAsWords
+{
+    public static Severity Severity(this RaisedAs level) => level == RaisedAs.Warning ? Findings.Severity.Warning : Findings.Severity.Notice;
+}

@@ -35,4 +35,7 @@ public sealed record SilenceLimits : IRuleLimits
     /// <summary>Longer than this is silence whatever the person's own gaps were. Days.</summary>
     [Range(7, 400)]
     public int CeilingDays { get; init; } = 42;
+
+    /// <summary>As what it is raised. A choice.</summary>
+    public RaisedAs Severity { get; init; } = RaisedAs.Notice;
 }

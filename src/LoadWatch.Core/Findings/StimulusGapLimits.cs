@@ -1,4 +1,5 @@
 using System.ComponentModel.DataAnnotations;
+using LoadWatch.Stimulus;
 
 namespace LoadWatch.Findings;
 
@@ -7,6 +8,9 @@ public sealed record StimulusGapLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;
+
+    /// <summary>Body regions that are watched: legs, trunk, arms.</summary>
+    public IReadOnlyList<BodyRegion> Regions { get; init; } = [BodyRegion.Legs];
 
     /// <summary>Days without heavy or fast work that raise a notice. Days.</summary>
     [Range(2, 120)]
