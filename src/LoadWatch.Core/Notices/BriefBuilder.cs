@@ -23,7 +23,7 @@ public static class BriefBuilder
         var upTo = shown.Where(subject => subject.Days.Count > 0).Max(subject => (LocalDate?)subject.Days[^1].Date);
         var silent = CommonSilence.Of(shown, inboxIsAway);
         var flagged = shown.Where(subject => ToLookAt(subject) && !(silent.Contains(subject) && CommonSilence.IsOnlySilent(subject))).OrderByDescending(Worst).ToList();
-        var asked = CommonSilence.Lines(shown, silent).Concat(questions).ToList();
+        var asked = CommonSilence.Lines(shown, silent).Concat(UnseenAlerts.Lines(contact, date, shown, self)).Concat(questions).ToList();
         return new Brief
         {
             ContactId = contact.Id,

@@ -48,6 +48,10 @@ public static class Score
         .GroupBy(change => person.AlertOf(change.AlertId).Key)
         .Sum(key => Crowded([.. key.Select(change => change.Date)])));
 
+    /// <summary>Raised dates within the counted days, by what they are about: the same where nothing but the service's own course differs.</summary>
+    public static IReadOnlySet<Raise> CountedRaises(SeasonResult season) =>
+        season.People.SelectMany(Raises).Where(raise => raise.Date >= season.World.Counted).ToHashSet();
+
     /// <summary>People to act on in a brief, named or counted.</summary>
     public static IReadOnlyList<int> Rows(SeasonResult season) => [.. season.Briefs.Select(brief => brief.Flagged.Count + brief.FlaggedBeyond)];
 

@@ -53,16 +53,7 @@ public sealed class PersonNights(TruePerson truth, Group group, Sport sport, Cou
             plan = PlanOf(told);
         }
 
-        if (course.KnownThrough is not { } through)
-        {
-            Compute(course.FromNothing ? LocalDate.MinIsoValue : dirty.PlusDays(-LoadCalendar.SettledDaysBack), date);
-        }
-        else if (lastNight is null)
-        {
-            plan = PlanOf(truth.Told);
-            Compute(LocalDate.MinIsoValue, through);
-        }
-
+        Compute(course.FromNothing ? LocalDate.MinIsoValue : dirty.PlusDays(-LoadCalendar.SettledDaysBack), date);
         lastNight = date;
         Take(AlertReview.Review(
             truth.Person.Id,
@@ -70,19 +61,12 @@ public sealed class PersonNights(TruePerson truth, Group group, Sport sport, Cou
             [.. alerts.Values.Where(alert => alert.State != AlertState.Normal)],
             id => sequences.GetValueOrDefault(id),
             findings.GetValueOrDefault(date, []),
-            (key, on) => findings.GetValueOrDefault(on, []).Exists(finding => finding.Key == key)));
+            (key, on) => findings.GetValueOrDefault(on, []).Exists(finding => finding.Key == key && finding.Severity > Severity.Note),
+            new Watching(group.Limits, days.Count == 0 ? DayPlan.None : days[^1].Plan)));
     }
 
     /// <summary>Staff say that they have seen an alert.</summary>
     public void Acknowledge(string id, LocalDate date) => Take(AlertReview.Acknowledge(alerts[id], date, known => sequences.GetValueOrDefault(known)));
-
-    public void AcknowledgeAll(LocalDate date)
-    {
-        foreach (var id in alerts.Values.Where(alert => !AlertLife.IsAcknowledged(alert.State)).Select(alert => alert.Id).ToList())
-        {
-            Acknowledge(id, date);
-        }
-    }
 
     private void Compute(LocalDate from, LocalDate to)
     {

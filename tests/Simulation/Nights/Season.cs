@@ -2,6 +2,7 @@ using LoadWatch.Alerts;
 using LoadWatch.Notices;
 using LoadWatch.People;
 using LoadWatch.Recordings;
+using LoadWatch.Service.Pipeline;
 using LoadWatch.Simulation.Worlds;
 using NodaTime;
 
@@ -19,36 +20,35 @@ public static class Season
         var contact = new Contact(
             "contact", "Contact", ContactRole.Coach, [world.Group.Id], [], people[0].Truth.Person.Zone, new LocalTime(6, 30), Enum.GetValues<IsoDayOfWeek>().Where(day => day != IsoDayOfWeek.None).ToHashSet());
         var briefs = new List<Brief>();
-        foreach (var date in Dates(world, how))
+        foreach (var night in Nights(world, how))
         {
+            var date = DayUpdate.LastDateOver(people[0].Truth.Person, night);
             people.AsParallel().ForAll(person => person.Pass(date));
-            if (how.KnownThrough is not null)
+            var morning = date.PlusDays(1);
+            var brief = BriefBuilder.Build(contact, morning, [.. people.Select(person => Subject(person, world.Group, date))], []);
+            if (how.StaffAnswer)
             {
-                people.ForEach(person => person.AcknowledgeAll(date));
+                Answer(people, brief, morning);
             }
-            else if (date >= world.Counted)
+
+            if (date >= world.Counted)
             {
-                var morning = date.PlusDays(1);
-                var brief = BriefBuilder.Build(contact, morning, [.. people.Select(person => Subject(person, world.Group, date))], []);
                 briefs.Add(brief);
-                if (how.StaffAnswer)
-                {
-                    Answer(people, brief, morning);
-                }
             }
         }
 
         return new SeasonResult(world, people, briefs);
     }
 
-    private static IEnumerable<LocalDate> Dates(World world, Course how)
+    /// <summary>Every 24 hours, by no clock that is ever put back.</summary>
+    private static IEnumerable<Instant> Nights(World world, Course how)
     {
-        var from = how.BackFillUntil ?? world.First;
-        for (var date = from; date <= world.Last; date = date.PlusDays(1))
+        var first = world.Counted.PlusDays(1 - how.NightsBefore).AtStartOfDayInZone(world.People[0].Person.Zone).ToInstant() + Duration.FromHours(3);
+        for (var night = first; night.InUtc().Date <= world.Last.PlusDays(1); night += Duration.FromDays(1))
         {
             for (var times = 0; times < how.TimesANight; times++)
             {
-                yield return date;
+                yield return night;
             }
         }
     }
@@ -87,14 +87,11 @@ public sealed record Course
     /// <summary>Every night begins from what came in, with nothing computed before.</summary>
     public bool FromNothing { get; init; }
 
-    /// <summary>Everything up to this date is known from the first night on, so that days are computed once: a quick look at limits.</summary>
-    public LocalDate? KnownThrough { get; init; }
-
     /// <summary>Sweeps a night: the second finds nothing new.</summary>
     public int TimesANight { get; init; } = 1;
 
-    /// <summary>The first night; all that came before comes in it. Null: the first date.</summary>
-    public LocalDate? BackFillUntil { get; init; }
+    /// <summary>Nights before the counted ones; all that came before comes in the first of them.</summary>
+    public int NightsBefore { get; init; } = 14;
 
     /// <summary>Whether anybody says that they have seen anything.</summary>
     public bool StaffAnswer { get; init; } = true;

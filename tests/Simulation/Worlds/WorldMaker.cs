@@ -9,8 +9,8 @@ namespace LoadWatch.Simulation.Worlds;
 /// <param name="limits">Of the rules of the group.</param>
 public sealed class WorldMaker(int seed, Habits habits, Noise noise, RuleLimits limits)
 {
-    /// <summary>A Monday; the clocks change on 30 March and on 26 October.</summary>
-    private static readonly LocalDate First = new(2025, 1, 6);
+    /// <summary>A Monday; the clocks of the zone change on 26 October, in the first of the counted weeks.</summary>
+    private static readonly LocalDate First = new(2025, 6, 30);
 
     /// <summary>Days in which rules learn what is usual.</summary>
     private const int LearningDays = 112;
@@ -21,9 +21,9 @@ public sealed class WorldMaker(int seed, Habits habits, Noise noise, RuleLimits 
     /// <param name="days">Counted days.</param>
     public World Healthy(int people, int days) => Make(people, days, (_, _) => null);
 
-    /// <summary>People with an episode each, the kinds by turns.</summary>
-    public World WithEpisodes(int people, int days, IReadOnlyList<HappeningKind> kinds) =>
-        Make(people, days, (chance, index) => Episode(chance, kinds[index % kinds.Count], First.PlusDays(LearningDays), days));
+    /// <summary>People with an episode each, the kinds of their group by turns.</summary>
+    public World WithEpisodes(int people, int days) =>
+        Make(people, days, (chance, index) => Episode(chance, habits.Episodes[index % habits.Episodes.Count], First.PlusDays(LearningDays), days));
 
     /// <summary>Some of them stay away for three weeks and tell nobody.</summary>
     public World WithAway(int people, int days, double share) => Make(
