@@ -1,5 +1,4 @@
 using System.Text.Json;
-using System.Text.Json.Nodes;
 using LoadWatch.Findings;
 using LoadWatch.People;
 
@@ -44,32 +43,21 @@ public sealed class OtherLimits
     /// <summary>A group's limits as the file would have them.</summary>
     public RuleLimits Of(Group group)
     {
-        var limits = JsonSerializer.SerializeToNode(group.Limits, ConfigurationJson.Options)!.AsObject();
-        var own = Groups().FirstOrDefault(one => one.Element.TryGetProperty("id", out var id) && id.GetString() == group.Id);
-        return Merge(Merge(limits, Part(root)), own.Element.ValueKind == JsonValueKind.Object ? Part(own.Element) : []).Deserialize<RuleLimits>(ConfigurationJson.Options)!;
+        var limits = LimitsMerge.Merge(JsonSerializer.SerializeToNode(group.Limits, ConfigurationJson.Options)!.AsObject(), LimitsMerge.Limits(root));
+        var merged = Own(group) is { } own ? LimitsMerge.Merge(LimitsMerge.Merge(limits, LimitsMerge.OfKind(own.Element)), LimitsMerge.Limits(own.Element)) : limits;
+        return merged.Deserialize<RuleLimits>(ConfigurationJson.Options)!;
     }
 
-    private IEnumerable<(Group Group, string At)> Places(IReadOnlyDictionary<string, Group> groups) => groups.Values.Select(group =>
-    {
-        var own = Groups().FirstOrDefault(one => one.Element.TryGetProperty("id", out var id) && id.GetString() == group.Id);
-        return (group, own.Element.ValueKind == JsonValueKind.Object && own.Element.TryGetProperty("limits", out _) ? $"$.groups[{own.Place}].limits" : "$.limits");
-    });
+    private IEnumerable<(Group Group, string At)> Places(IReadOnlyDictionary<string, Group> groups) => groups.Values
+        .Select(group => (group, Own(group) is { } own && own.Element.TryGetProperty("limits", out _) ? $"$.groups[{own.Place}].limits" : "$.limits"));
+
+    /// <summary>What the file says of the group alone.</summary>
+    private (JsonElement Element, int Place)? Own(Group group) => root.TryGetProperty("groups", out var groups)
+        ? groups.EnumerateArray()
+            .Select((element, place) => ((JsonElement, int)?)(element, place))
+            .FirstOrDefault(one => one!.Value.Item1.TryGetProperty("id", out var id) && id.GetString() == group.Id)
+        : null;
 
     private static IEnumerable<(string At, string Reason)> Faults(RuleLimits limits, string at) =>
         RangeCheck.Faults(limits, at).Concat(LimitsCheck.Faults(limits).Select(fault => ($"{at}.{fault.Path}", fault.Reason)));
-
-    private IEnumerable<(JsonElement Element, int Place)> Groups() =>
-        root.TryGetProperty("groups", out var groups) ? groups.EnumerateArray().Select((element, place) => (element, place)) : [];
-
-    private static JsonObject Part(JsonElement owner) => owner.TryGetProperty("limits", out var limits) ? JsonObject.Create(limits)! : [];
-
-    private static JsonObject Merge(JsonObject under, JsonObject over)
-    {
-        foreach (var (key, value) in over)
-        {
-            under[key] = value is JsonObject inner && under[key] is JsonObject below ? Merge((JsonObject)below.DeepClone(), inner) : value?.DeepClone();
-        }
-
-        return under;
-    }
 }
