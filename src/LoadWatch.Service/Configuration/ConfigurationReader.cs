@@ -61,6 +61,7 @@ public sealed class ConfigurationReader
         var contacts = ContactsReader.Read(file, groups, roster is null ? null : people, zone, faults);
         var administrators = AdministratorsReader.Read(file, zone, faults);
         var mail = new MailReader(Resolve, faults.Add).Read(file);
+        var webhook = new WebhookReader(Resolve, faults.Add).Read(file);
         faults.Stop();
 
         var (hash, text) = Version(json, file);
@@ -85,6 +86,7 @@ public sealed class ConfigurationReader
             AllowNetworkDataFolder = file.AllowNetworkDataFolder,
             Administrators = administrators,
             Mail = mail,
+            Webhook = webhook,
             Devices = devices!,
             Subjects = new Subjects(people, groups, devices!),
         };
