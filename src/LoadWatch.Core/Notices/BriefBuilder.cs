@@ -1,5 +1,6 @@
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
+using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Plans;
 using NodaTime;

@@ -1,6 +1,7 @@
 using System.Globalization;
 using LoadWatch.Alerts;
 using LoadWatch.Days;
+using LoadWatch.Limits;
 using LoadWatch.Stimulus;
 using NodaTime;
 
@@ -44,7 +45,7 @@ internal static class BriefRows
             EverHeavy(days, upTo, legs) ? legs?.DaysSince : null,
             legs?.Days28,
             [.. Enumerable.Range(1 - StripDays, StripDays).Select(offset => DayOf(days, upTo.PlusDays(offset)))],
-            Remark(subject, [.. Absent(days, upTo, view), .. Own(subject, today, back, known, NeverHeavy(days, upTo, legs))]));
+            Remark(subject, [.. Absent(days, upTo, view), .. RoomOf(subject, upTo, self), .. Own(subject, today, back, known, NeverHeavy(days, upTo, legs))]));
     }
 
     /// <summary>A date without a day is unknown.</summary>
@@ -80,6 +81,15 @@ internal static class BriefRows
             .Concat(given.Count > RemarksShown ? [$"{given.Count - RemarksShown} more of the kind"] : Array.Empty<string>());
         var remark = string.Join("; ", all);
         return remark.Length == 0 ? null : remark;
+    }
+
+    /// <summary>Told to whoever reads about themselves, where there is a figure.</summary>
+    private static IEnumerable<string> RoomOf(BriefSubject subject, LocalDate upTo, bool self)
+    {
+        if (self && subject.Room is { Load: not null } room && room.Date == upTo.PlusDays(1))
+        {
+            yield return $"{RoomWords.Of(room)}: {RoomWords.Meaning}";
+        }
     }
 
     /// <summary><c>away since 2 March</c>.</summary>

@@ -1,6 +1,7 @@
 using LoadWatch.Alerts;
 using LoadWatch.Days;
 using LoadWatch.Findings;
+using LoadWatch.Limits;
 using LoadWatch.People;
 
 namespace LoadWatch.Notices;
@@ -19,6 +20,9 @@ public sealed record BriefSubject(
 {
     /// <summary>Notes of the last date that are to be told.</summary>
     public IReadOnlyList<Finding> Notes { get; init; } = [];
+
+    /// <summary>What the limits leave open on the date behind the last day; null where it is not known yet.</summary>
+    public TodaysRoom? Room { get; init; }
 }
 
 /// <summary>An alert as a contact meets it.</summary>

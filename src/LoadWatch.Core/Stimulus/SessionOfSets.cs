@@ -1,3 +1,4 @@
+using LoadWatch.Activities;
 using LoadWatch.People;
 using LoadWatch.Recordings;
 using NodaTime;
@@ -18,9 +19,10 @@ public static class SessionOfSets
         LocalDate date,
         string person,
         AnchorBook anchors,
-        IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> exercises)
+        ComputationSettings settings)
     {
-        var placed = work.Take(MostSets).Select(set => Place(set, SetDemand.Of(set, date, person, anchors), exercises)).ToList();
+        var exercises = settings.Exercises;
+        var placed = work.Take(MostSets).Select(set => Place(set, SetDemand.Of(set, date, person, anchors, settings.Equations), exercises)).ToList();
         var unplaced = placed.FindAll(set => set.Regions.Count == 0);
         var notPlaced = NotPlaced(unplaced, work.Count - placed.Count).ToList();
         var elsewhere = unplaced.Count + work.Count - placed.Count;

@@ -26,7 +26,7 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
     {
         var work = usable.Recording.Sets.Where(set => set.Active).ToList();
         return work.Count > 0
-            ? SessionOfSets.Of(work, date, person.Id, anchors, settings.Exercises)
+            ? SessionOfSets.Of(work, date, person.Id, anchors, settings)
             : OfSport(usable, date, person, anchors, settings.Sports);
     }
 

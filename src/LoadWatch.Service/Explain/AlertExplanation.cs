@@ -2,7 +2,6 @@ using System.Globalization;
 using System.Text;
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
-using LoadWatch.Notices;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Decisions;

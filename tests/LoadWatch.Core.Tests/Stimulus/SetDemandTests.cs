@@ -239,7 +239,7 @@ public class SetDemandTests
 
     private static RegionStimulus Region(StrengthSet set) => SetStimulus.Of(BodyRegion.Legs, [Demand(set, Anchor("fresh"))!], unread: 0, []);
 
-    private static SetDemand? Demand(StrengthSet set, params Anchor[] anchors) => SetDemand.Of(set, Given.Date, "p1", Given.Anchors(anchors)).Demand;
+    private static SetDemand? Demand(StrengthSet set, params Anchor[] anchors) => SetDemand.Of(set, Given.Date, "p1", Given.Anchors(anchors), new()).Demand;
 
     private static string[] Cells(string pattern) => pattern.Split(' ', StringSplitOptions.RemoveEmptyEntries);
 
@@ -267,7 +267,7 @@ public class SetDemandTests
             Machine = maximum is "machine" or "borrowed" or "other" ? "Rack 2" : null,
         };
         Anchor[] anchors = maximum == "none" ? [] : [Anchor(maximum)];
-        var (demand, missing) = SetDemand.Of(set, Given.Date, "p1", Given.Anchors(anchors));
+        var (demand, missing) = SetDemand.Of(set, Given.Date, "p1", Given.Anchors(anchors), new());
         return demand is null ? $"unknown: {missing}" : Told(demand);
     }
 

@@ -92,7 +92,7 @@ public class SetStimulusTests
     [InlineData(8, double.NaN, double.NaN)]
     public void OtherwiseTheSetIsUnknownAndSaysWhatIsMissing(int? repetitions, double? kilograms, double? reserve)
     {
-        var (demand, missing) = SetDemand.Of(Given.Set("squat", repetitions, kilograms, reserve), Given.Date, "p1", AnchorBook.Empty);
+        var (demand, missing) = SetDemand.Of(Given.Set("squat", repetitions, kilograms, reserve), Given.Date, "p1", AnchorBook.Empty, new());
 
         Assert.Null(demand);
         Assert.NotNull(missing);
@@ -113,5 +113,5 @@ public class SetStimulusTests
         });
 
     private static SetDemand? Demand(StrengthSet set, params Anchor[] anchors) =>
-        SetDemand.Of(set, Given.Date, "p1", Given.Anchors(anchors)).Demand;
+        SetDemand.Of(set, Given.Date, "p1", Given.Anchors(anchors), new()).Demand;
 }

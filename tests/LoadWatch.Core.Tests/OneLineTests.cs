@@ -1,6 +1,4 @@
-using LoadWatch.Notices;
-
-namespace LoadWatch.Tests.Notices;
+namespace LoadWatch.Tests;
 
 public sealed class OneLineTests
 {

@@ -1,6 +1,6 @@
 using LoadWatch.Loads;
 
-namespace LoadWatch.Notices;
+namespace LoadWatch.Tests.Loads;
 
 public class LoadUnitsTests
 {

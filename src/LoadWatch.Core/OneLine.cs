@@ -1,7 +1,7 @@
 using System.Globalization;
 using System.Text;
 
-namespace LoadWatch.Notices;
+namespace LoadWatch;
 
 /// <summary>
 /// Makes a name or sentence from outside safe for one line of text: nothing in it can start a new line, turn the reading direction or control a terminal.

@@ -1,9 +1,9 @@
 // The usual week: the median of a person's ordinary weeks. A week is ordinary when enough of it is known, it holds some load and none of its days is set
 // aside by plan or answers (light week, off-season, travel, absence, return). All a choice.
-using LoadWatch.Days;
+using LoadWatch.Plans;
 using NodaTime;
 
-namespace LoadWatch.Findings;
+namespace LoadWatch.Days;
 
 /// <summary>Seven days in a row.</summary>
 /// <param name="UpTo">Its last date.</param>
@@ -29,17 +29,10 @@ internal readonly record struct PastWeek(LocalDate UpTo, double? Load, bool IsSe
         }
     }
 
-    /// <summary>Null without any.</summary>
-    public static double? Median(IEnumerable<PastWeek> weeks)
-    {
-        var median = new RunningMedian();
-        foreach (var week in weeks)
-        {
-            median.Add(week.Load);
-        }
-
-        return median.Value;
-    }
+    /// <param name="acute">Its load as the last of its days tells it.</param>
+    /// <param name="isSetAside">One of its days is.</param>
+    public static PastWeek EndingOn(LocalDate date, double? acute, double coverage7, bool isSetAside, int coveredOf7) =>
+        new(date, Math.Round(coverage7 * Length) >= coveredOf7 ? acute : null, isSetAside);
 
     private static PastWeek EndingAt(IReadOnlyList<Day> days, int index, int coveredOf7)
     {
@@ -49,7 +42,6 @@ internal readonly record struct PastWeek(LocalDate UpTo, double? Load, bool IsSe
             aside = aside || days[at].Plan.IsSetAside();
         }
 
-        var last = days[index];
-        return new PastWeek(last.Date, Math.Round(last.Coverage7 * Length) >= coveredOf7 ? last.Acute : null, aside);
+        return EndingOn(days[index].Date, days[index].Acute, days[index].Coverage7, aside, coveredOf7);
     }
 }

@@ -1,6 +1,4 @@
-using LoadWatch.Loads;
-
-namespace LoadWatch.Notices;
+namespace LoadWatch.Loads;
 
 /// <summary>The unit of a group's load, in texts and over columns.</summary>
 public static class LoadUnits
