@@ -24,7 +24,7 @@ public static class BriefBuilder
         var upTo = shown.Where(subject => subject.Days.Count > 0).Max(subject => (LocalDate?)subject.Days[^1].Date);
         var silent = CommonSilence.Of(shown, inboxIsAway);
         var flagged = shown.Where(subject => ToLookAt(subject) && !(silent.Contains(subject) && CommonSilence.IsOnlySilent(subject))).OrderByDescending(Worst).ToList();
-        var asked = CommonSilence.Lines(shown, silent).Concat(questions).ToList();
+        var asked = CommonSilence.Lines(shown, silent).Concat(UnseenAlerts.Lines(contact, date, shown, self)).Concat(questions).ToList();
         return new Brief
         {
             ContactId = contact.Id,
@@ -41,8 +41,8 @@ public static class BriefBuilder
         };
     }
 
-    /// <summary>Standing and told: one that is shelved is not.</summary>
-    internal static bool IsActive(AlertNews news) => AlertLife.IsActive(news.Alert.State) && news.Alert.ShelvedUntil is null;
+    /// <summary>Standing and told: one that is shelved or suppressed is not.</summary>
+    internal static bool IsActive(AlertNews news) => news.Alert.IsTold;
 
     /// <summary>Active alerts, warnings first, then by rule and region.</summary>
     internal static IEnumerable<AlertNews> Active(BriefSubject subject) => subject.Alerts

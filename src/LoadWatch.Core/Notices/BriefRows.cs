@@ -131,6 +131,11 @@ internal static class BriefRows
             yield return $"shelved until {BriefNumbers.Day(news.Alert.ShelvedUntil)}: {RuleTexts.Named(news.Alert.Key, self: false)}";
         }
 
+        foreach (var news in subject.Alerts.Where(news => news.Alert.Watch == AlertWatch.SuppressedByDesign && AlertLife.IsActive(news.Alert.State)).OrderBy(news => news.Alert.Id, StringComparer.Ordinal))
+        {
+            yield return $"not watched for now by plan or answers: {RuleTexts.Named(news.Alert.Key, self: false)}";
+        }
+
         if (subject.Days.All(day => day.State != DayState.Recorded))
         {
             yield return "nothing recorded yet";

@@ -29,4 +29,8 @@ public sealed record BriefSubject(
 /// <param name="IsNew">Raised, raised again or risen since the contact's last brief.</param>
 /// <param name="ReturnedSince">It returned since the contact's last brief.</param>
 /// <param name="Corrected">It returned because later data undid it.</param>
-public sealed record AlertNews(Alert Alert, bool IsNew, bool ReturnedSince, bool Corrected);
+public sealed record AlertNews(Alert Alert, bool IsNew, bool ReturnedSince, bool Corrected)
+{
+    /// <summary>Why it is over, where the limits of its rule were changed or its rule is no longer watched; null: it returned, or see <see cref="Corrected"/>.</summary>
+    public AlertChangeReason? Ended { get; init; }
+}

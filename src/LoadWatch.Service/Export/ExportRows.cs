@@ -100,4 +100,4 @@ public sealed record FindingLine(
     string Person, string Rule, string? Region, string? Quantity, string Date, string Severity, double Value, double Limit, string Unit);
 
 public sealed record AlertLine(
-    string Id, string Person, string Rule, string? Region, string? Quantity, string Raised, string State, string Severity, string? ShelvedUntil, string Text);
+    string Id, string Person, string Rule, string? Region, string? Quantity, string Raised, string State, string Severity, string? ShelvedUntil, string Watch, string Text);

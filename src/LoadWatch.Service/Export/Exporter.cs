@@ -212,5 +212,6 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
         Words.Of(alert.State),
         Words.Of(alert.Severity),
         alert.ShelvedUntil is { } until ? Words.Date(until) : null,
+        Words.Of(alert.Watch),
         alert.Text);
 }

@@ -146,11 +146,15 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     private static AlertNews News(Alert alert, List<AlertChange> changes)
     {
         var isOver = alert.State is AlertState.Normal or AlertState.Returned;
+        var ended = isOver ? changes.FindLast(change => AlertLife.IsActive(change.From) && !AlertLife.IsActive(change.To)) : null;
         return new AlertNews(
             alert,
             changes.Exists(change => change.Reason is AlertChangeReason.Raised or AlertChangeReason.RaisedAgain or AlertChangeReason.SeverityRose),
-            isOver && changes.Exists(change => change.Reason is AlertChangeReason.ReturnedToNormal or AlertChangeReason.Corrected),
-            isOver && changes.Exists(change => change.Reason == AlertChangeReason.Corrected));
+            ended is not null,
+            ended is { Reason: AlertChangeReason.Corrected })
+        {
+            Ended = ended?.Reason,
+        };
     }
 
     private static List<string> Remarks(IReadOnlyList<Day> days)

@@ -23,7 +23,7 @@ public sealed class ExportContractTests : IDisposable
     [Theory]
     [InlineData("arrivals", "sha256,file,kind,state,reason,person")]
     [InlineData("findings", "person,rule,region,quantity,date,severity,value,limit,unit")]
-    [InlineData("alerts", "id,person,rule,region,quantity,raised,state,severity,shelved_until,text")]
+    [InlineData("alerts", "id,person,rule,region,quantity,raised,state,severity,shelved_until,watch,text")]
     [InlineData(
         "days",
         "person,date,state,state_source,load,load_error,acute,chronic,ratio_coupled,ratio_uncoupled,ratio_ewma,weekly_change,weekly_change_ordinary,usual_week,"
