@@ -32,7 +32,7 @@ public static class BriefBuilder
             Date = date,
             DataUpTo = upTo,
             FirstLine = FirstLine.Of(shown, flagged, silent.Count, upTo, asked, self),
-            Flagged = [.. Named(flagged).Select(subject => Flag(subject, contact.Role, self))],
+            Flagged = [.. Named(flagged).Select(subject => Flag(subject, contact.Role, upTo ?? date.PlusDays(-1), self))],
             FlaggedBeyond = Math.Max(0, flagged.Count - FlaggedAtMost),
             Returned = [.. shown.SelectMany(subject => Returned(subject, self))],
             Changed = [.. shown.SelectMany(subject => Changed(subject, self))],
@@ -91,8 +91,11 @@ public static class BriefBuilder
         return flagged.Where(named.Contains);
     }
 
-    private static FlaggedPerson Flag(BriefSubject subject, ContactRole role, bool self) =>
-        new(subject.Person.Id, NameOf(subject.Person, self), Worst(subject), [.. Active(subject).Select(news => Reason(news, role, self))]);
+    private static FlaggedPerson Flag(BriefSubject subject, ContactRole role, LocalDate upTo, bool self) =>
+        new(subject.Person.Id, NameOf(subject.Person, self), Worst(subject), [.. Active(subject).Select(news => Reason(news, role, self))])
+        {
+            Picture = PersonPictures.Of(subject, upTo),
+        };
 
     private static FlaggedReason Reason(AlertNews news, ContactRole role, bool self) => new(
         news.Alert.Id,

@@ -44,11 +44,12 @@ internal static class BriefRows
             known,
             EverHeavy(days, upTo, legs) ? legs?.DaysSince : null,
             legs?.Days28,
-            [.. Enumerable.Range(1 - StripDays, StripDays).Select(offset => Strip(days, upTo.PlusDays(offset)))],
+            [.. Enumerable.Range(1 - StripDays, StripDays).Select(offset => DayOf(days, upTo.PlusDays(offset)))],
             Remark(subject, [.. Absent(days, upTo, view), .. RoomOf(subject, upTo, self), .. Own(subject, today, back, known, NeverHeavy(days, upTo, legs))]));
     }
 
-    private static BriefDay Strip(Dictionary<LocalDate, Day> days, LocalDate date)
+    /// <summary>A date without a day is unknown.</summary>
+    public static BriefDay DayOf(Dictionary<LocalDate, Day> days, LocalDate date)
     {
         var day = days.GetValueOrDefault(date);
         return new BriefDay(
