@@ -44,7 +44,7 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
             return new SessionStimulus([.. BodyRegions.All.Select(region => EnduranceEstimate.Nothing.For(region, [question]))], [question]);
         }
 
-        var capacity = sport.IsOnFoot ? null : PowerCapacity.On(date, person.Id, anchors);
+        var capacity = sport.IsOnFoot ? null : PowerCapacity.On(date, person.Id, anchors, sport);
         var notSeen = NotRead(usable, capacity).ToList();
         var estimate = Best(usable, capacity, date, person, anchors);
         return new SessionStimulus([.. regions.Select(region => estimate.For(region, notSeen))], []);
