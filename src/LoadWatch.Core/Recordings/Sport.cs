@@ -14,7 +14,7 @@ public sealed record Sport(string Name, string? Detail = null)
 
     /// <summary>
     /// The sports that are one kind of movement share a word: a watch at a match is often set to running, so team sports and running are one family; so are a sport and
-    /// its machine, and what else there is of machines of the gym. A choice.
+    /// its machine, and what else there is of machines of the gym; a bicycle moved by the arms is one of its own. A choice.
     /// </summary>
     public string Family => this switch
     {
@@ -23,6 +23,7 @@ public sealed record Sport(string Name, string? Detail = null)
         { Name: "fitness_equipment", Detail: "indoor_rowing" } => "rowing",
         { Name: "fitness_equipment" } => "training",
         { Name: "e_biking" } => "cycling",
+        { Name: "cycling", Detail: "hand_cycling" or "indoor_hand_cycling" } => "hand_cycling",
         { IsTeamSport: true } => "running",
         _ => Name,
     };

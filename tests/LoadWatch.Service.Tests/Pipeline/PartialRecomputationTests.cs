@@ -193,7 +193,7 @@ public sealed class PartialRecomputationTests : IDisposable
     {
         string[] tables =
         [
-            "recording", "activity", "histogram", "day", "finding", "question", "content_question", "table_row", "table_content",
+            "recording", "activity", "histogram", "best_mean", "anchor_observed", "day", "finding", "question", "content_question", "table_row", "table_content",
             "arrival",
         ];
         using var connection = new SqliteConnection($"Data Source={Path.Combine(folder.Data, "loadwatch.db")};Pooling=False;Mode=ReadOnly");
