@@ -50,11 +50,11 @@ internal static class AnchorProposals
 
     /// <summary>
     /// The highest heart rate held for 15 s that two sessions reached. Of those who never go to their limit it lies below the true one; so it is taken only above what age
-    /// lets expect, where the birth year is known.
+    /// lets expect (by Tanaka, whatever equation stands in elsewhere), where the birth year is known.
     /// </summary>
     private static IReadOnlyList<ObservedAnchor> HeartRate(Person person, LocalDate month, IReadOnlyList<SessionBests> sessions)
     {
-        var expected = person.AgeOn(month) is { } age ? TanakaHeartRateMax.Of(age) : null;
+        var expected = person.AgeOn(month) is { } age ? HeartRateMaxEquation.Tanaka.BpmAt(age, person.Sex) : null;
         var shown = sessions
             .Select(session => (session.Date, Bpm: Math.Floor(session.Best(Channel.HeartRate, HeartRateSeconds) ?? 0)))
             .Where(one => !(one.Bpm > expected + AboveEquationBpm))

@@ -93,7 +93,7 @@ public sealed class ObservedAnchorUpdate(WorkingConfiguration configuration, Sto
         var since = from.PlusMonths(-ObservedAnchors.Months);
         IEnumerable<ShownMaximum> maxima =
         [
-            .. ShownMaxima.Of(session.TableRows.OfPerson(person.Id, RowKind.Sets, since, last).Select(row => (row.Date, (SetRow)row.Content)), person.Zone),
+            .. ShownMaxima.Of(session.TableRows.OfPerson(person.Id, RowKind.Sets, since, last).Select(row => (row.Date, (SetRow)row.Content)), person, configuration.Computation.Equations.OneRepetitionMaxByRepetitions),
             .. session.Activities.QuantitiesLike(person.Id, since, last, QuantityNames.OneRepetitionMaxOf)
                 .SelectMany(one => ShownMaxima.Of(one.Date, one.Quantities, configuration.Computation.Exercises.Keys)),
         ];
