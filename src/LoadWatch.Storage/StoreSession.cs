@@ -2,6 +2,7 @@ using System.Data.Common;
 using Dapper;
 using LoadWatch.Storage.Activities;
 using LoadWatch.Storage.Alerts;
+using LoadWatch.Storage.Anchors;
 using LoadWatch.Storage.Audits;
 using LoadWatch.Storage.Configurations;
 using LoadWatch.Storage.Days;
@@ -36,6 +37,7 @@ public sealed class StoreSession
         Sightings = new SightingTable(this);
         Recordings = new RecordingTable(this);
         Activities = new ActivityTable(this);
+        ObservedAnchors = new ObservedAnchorTable(this);
         Days = new DayTable(this);
         Rooms = new TodaysRoomTable(this);
         Findings = new FindingTable(this);
@@ -65,6 +67,8 @@ public sealed class StoreSession
     public RecordingTable Recordings { get; }
 
     public ActivityTable Activities { get; }
+
+    public ObservedAnchorTable ObservedAnchors { get; }
 
     public DayTable Days { get; }
 

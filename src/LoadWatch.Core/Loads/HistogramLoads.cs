@@ -47,7 +47,7 @@ public sealed record HistogramLoads(IReadOnlyList<Quantity> Quantities, IReadOnl
 
         if (!sport.IsOnFoot
             && histograms.TryGetValue(Channel.Power, out var power)
-            && anchors.On(date, person.Id, AnchorKind.CriticalPower) is { } criticalPower)
+            && anchors.On(date, person.Id, AnchorKind.CriticalPower, sport) is { } criticalPower)
         {
             yield return ZoneTimes.OfPower(power, criticalPower, settings.PowerBounds);
         }

@@ -12,7 +12,7 @@ public static class OneRepetitionMaxEstimate
     /// <summary>One quantity for each exercise on each machine with a set that tells, in kilograms, marked as estimated.</summary>
     public static IEnumerable<Quantity> Of(IEnumerable<StrengthSet> work, OneRepetitionMaxEquation equation) => work
         .Where(set => ExerciseWord.Canonical(set.Exercise) is not null)
-        .Select(set => (Name: NameOf(set), Kilograms: KilogramsOf(set, equation)))
+        .Select(set => (Name: NameOf(set.Exercise, set.Machine), Kilograms: KilogramsOf(set, equation)))
         .Where(set => set.Kilograms.HasValue)
         .GroupBy(set => set.Name, StringComparer.Ordinal)
         .Select(same => new Quantity(same.Key, same.Max(set => set.Kilograms!.Value), "kg", Estimated: true));
@@ -26,10 +26,9 @@ public static class OneRepetitionMaxEstimate
             : null;
 
     /// <summary><c>one_repetition_max_of_leg_press</c>, <c>one_repetition_max_of_leg_press_on_press_2</c>.</summary>
-    private static string NameOf(StrengthSet set)
+    internal static string NameOf(string? exercise, string? machine)
     {
-        var machine = ExerciseWord.Canonical(set.Machine);
-        var words = ExerciseWord.Canonical(set.Exercise) + (machine is null ? "" : $"_on_{machine}");
+        var words = ExerciseWord.Canonical(exercise) + (ExerciseWord.Canonical(machine) is { } word ? $"_on_{word}" : "");
         return QuantityNames.OneRepetitionMaxOf + string.Concat(words.Select(letter => char.IsAsciiLetterOrDigit(letter) ? letter : '_'));
     }
 }

@@ -36,7 +36,7 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
         IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> sports)
     {
         var sport = usable.Recording.Sport;
-        var power = ReadsSpeed(sport) ? null : PowerCapacity.On(date, person.Id, anchors);
+        var power = ReadsSpeed(sport) ? null : PowerCapacity.On(date, person.Id, anchors, sport);
         var speed = ReadsSpeed(sport) ? SpeedCapacity.On(date, person.Id, anchors) : null;
         if (SportRegions.Of(sport, sports) is { } regions)
         {

@@ -61,7 +61,7 @@ public sealed class ConfigurationReader
             person => person.Id,
             person => groups.TryGetValue(person.Group, out var group) ? person with { DayBeginsAt = group.DayBeginsAt } : person,
             StringComparer.OrdinalIgnoreCase);
-        var anchors = faults.Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList()));
+        var anchors = faults.Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList(), computation.Sports.Keys));
         var devices = faults.Collect(() => roster is null || !HasDevices(file) ? DeviceBook.Empty : DevicesReader.Read(Resolve(file.Devices), file.Devices, people));
         var limits = LimitsOfPeople(json, file, people, roster is not null);
         var contacts = ContactsReader.Read(file, groups, roster is null ? null : people, zone, faults);

@@ -37,6 +37,7 @@ public static class DayExplanation
 
         text.AppendLine(CultureInfo.InvariantCulture, $"{OneLine.Of(known.Name)}, {Words.Date(day.Date)}: {Words.Of(day.State)}{(day.StateSource is { } source ? $" ({source})" : "")}");
         AppendDecisions(text, session, known.Id, day.Date);
+        var basis = TableBasis.Of(configuration, session);
         foreach (var quiet in NotWatched.Of(session.Days.OfPerson(known.Id, day.Date.PlusDays(-LoadCalendar.LookBackDays), day.Date), configuration.GroupOf(known).Limits))
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"    {quiet.Sentence(day.Date)}");
@@ -44,10 +45,11 @@ public static class DayExplanation
 
         AppendTrends(text, day, configuration.GroupOf(known).LoadQuantity);
         DayTrendText.Append(text, day, session.Days.Before(known.Id, day.Date.PlusDays(1), day.Date));
-        RoomText.Append(text, new TodaysLimits(configuration, TableBasis.Of(configuration, session)), session, known, date is null ? [day.Date, day.Date.PlusDays(1)] : [day.Date]);
-        ReferenceExplanation.Append(text, known, configuration.GroupOf(known), TableBasis.Of(configuration, session).AnchorsOf(known), day.Date);
+        RoomText.Append(text, new TodaysLimits(configuration, basis), session, known, date is null ? [day.Date, day.Date.PlusDays(1)] : [day.Date]);
+        ReferenceExplanation.Append(text, known, configuration.GroupOf(known), basis, day.Date);
+        ReferenceExplanation.AppendObserved(text, known, basis, day.Date);
         var recorded = session.Activities.OfPerson(known.Id, day.Date, day.Date).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
-        foreach (var activity in PersonTraining.Of(session, configuration, TableBasis.Of(configuration, session), known, day.Date, day.Date).Activities)
+        foreach (var activity in PersonTraining.Of(session, configuration, basis, known, day.Date, day.Date).Activities)
         {
             AppendActivity(text, session, activity, recorded.GetValueOrDefault(activity.Key));
         }

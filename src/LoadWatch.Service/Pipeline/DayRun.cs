@@ -1,4 +1,5 @@
 using LoadWatch.Activities;
+using LoadWatch.Anchors;
 using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.Limits;
@@ -47,7 +48,7 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
         var to = IsDone ? through : first!.Value.PlusDays(StretchDays - 1);
         var training = PersonTraining.Of(session, configuration, basis, person, first ?? replaced, IsDone ? null : to.PlusDays(LoadCalendar.SettledDaysBack));
         var series = first is { } start ? Series(session, training, start, to) : new PersonSeries([], []);
-        var stretch = new DayStretch(person.Id, replaced, IsDone ? null : to, series, [.. Questions(training).Where(question => IsDone || question.About <= to)])
+        var stretch = new DayStretch(person.Id, replaced, IsDone ? null : to, series, [.. Questions(training).Where(question => question.About >= replaced && (IsDone || question.About <= to))])
         {
             Through = through,
             Marks = marks,
@@ -92,7 +93,16 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
     private IEnumerable<Question> Questions(JoinResult training) => training.Questions
         .Select(question => new Question(person.Id, question.MayWait ? question.Date.PlusDays(WaitDays) : question.Date, question.Sentence, question.Date))
         .Concat(training.UnknownExercises.Select(exercise => new Question(
-            person.Id, exercise.Date, $"exercise \"{exercise.Word}\": which body regions? A line under computation, exercises tells", exercise.Date)));
+            person.Id, exercise.Date, $"exercise \"{exercise.Word}\": which body regions? A line under computation, exercises tells", exercise.Date)))
+        .Concat(Contradictions());
+
+    /// <summary>Asked when such a value is adopted, and not again each month.</summary>
+    private IEnumerable<Question> Contradictions()
+    {
+        var (observed, stated) = (basis.ObservedOf(person), basis.StatedOf(person));
+        return observed.Select(one => one.From).Distinct()
+            .SelectMany(month => AnchorContradiction.On(month, observed, stated).Where(one => one.Observed.From == month).Select(one => new Question(person.Id, month, one.Words, month)));
+    }
 }
 
 /// <summary>What was computed of one stretch of a person's dates.</summary>

@@ -84,7 +84,7 @@ public class ChannelsTests
                 var watts = Readings(Channel.Power, shares, share => share * 1100);
                 var speeds = Readings(Channel.Speed, shares, share => share * 9);
                 var bpm = Readings(Channel.HeartRate, shares, share => 50 + (share * 140));
-                var power = PowerStimulus.Of(watts, PowerCapacity.On(Given.Date, "p1", anchors)!, variants);
+                var power = PowerStimulus.Of(watts, PowerCapacity.On(Given.Date, "p1", anchors, new Sport("cycling"))!, variants);
                 var speed = SpeedStimulus.Of(speeds, null, new Sport("running"), SpeedCapacity.On(Given.Date, "p1", anchors)!, variants);
                 var drive = HeartRateDrive.On(Given.Date, "p1", anchors, new HeartRateReserve(50, 190, Estimated: false));
                 var heartRate = HeartRateStimulus.Of(bpm, bpm.Milliseconds, drive, variants) with { LargeSeconds = default(Band) };

@@ -16,7 +16,7 @@ public class DriveTests
     [InlineData(174, 1)]
     public void HoldingAPowerAboveTheCriticalOneAsksForMoreAndMore(int second, double drive)
     {
-        var capacity = PowerCapacity.On(Given.Date, "p1", Given.Anchors(Given.Cyclist))!;
+        var capacity = PowerCapacity.On(Given.Date, "p1", Given.Anchors(Given.Cyclist), new Sport("cycling"))!;
 
         Assert.Equal(drive, Drives(new UsableChannel(Channel.Power, Given.Samples((350, 200)), 1), capacity)[second], 5e-5);
     }

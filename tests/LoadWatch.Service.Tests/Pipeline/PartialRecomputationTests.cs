@@ -210,7 +210,7 @@ public sealed class PartialRecomputationTests : IDisposable
     {
         string[] tables =
         [
-            "recording", "activity", "histogram", "day", "todays_room", "finding", "question", "content_question", "table_row", "table_content",
+            "recording", "activity", "histogram", "best_mean", "anchor_observed", "day", "todays_room", "finding", "question", "content_question", "table_row", "table_content",
             "arrival",
         ];
         using var connection = new SqliteConnection($"Data Source={Path.Combine(folder.Data, "loadwatch.db")};Pooling=False;Mode=ReadOnly");

@@ -43,6 +43,8 @@ public sealed class ActivityChecksumTests : StoreTest
     [InlineData("UPDATE activity SET date = '2026-03-09'")]
     [InlineData("UPDATE histogram SET bins = X'0401'")]
     [InlineData("DELETE FROM histogram")]
+    [InlineData("UPDATE best_mean SET means = zeroblob(8)")]
+    [InlineData("DELETE FROM best_mean")]
     public void AChangedCellIsFoundThoughTheEngineFindsNothing(string change)
     {
         Run(change);
