@@ -9,6 +9,7 @@ internal sealed class SessionSizes(RuleSubject subject)
 {
     private readonly SessionSpikeLimits limits = subject.Limits.SessionSpike;
     private readonly List<JoinedActivity> sessions = [.. subject.Activities.Where(activity => activity.AddsLoad)];
+    private readonly SensorFaults faults = new(subject);
 
     /// <summary>The sessions of a date that lie beyond the largest before.</summary>
     public IEnumerable<SessionSpike> Spikes(LocalDate date)
@@ -42,8 +43,10 @@ internal sealed class SessionSizes(RuleSubject subject)
 
     private static double? Run(JoinedActivity session) => session.Sport.Name == "running" ? Positive(session[QuantityNames.Distance]) : null;
 
-    private double? Load(JoinedActivity session) =>
-        Positive(subject.SessionLoads is { } loads ? loads.GetValueOrDefault(session.Key) : session[subject.LoadQuantity]);
+    /// <summary>Null as well where it was read from a sensor that failed.</summary>
+    private double? Load(JoinedActivity session) => faults.Mutes(session, subject.LoadQuantity)
+        ? null
+        : Positive(subject.SessionLoads is { } loads ? loads.GetValueOrDefault(session.Key) : session[subject.LoadQuantity]);
 
     private static double? Positive(double? value) => value > 0 ? value : null;
 

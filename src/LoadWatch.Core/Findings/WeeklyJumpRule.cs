@@ -18,7 +18,9 @@ public sealed class WeeklyJumpRule : IRule
 
     public string Name => "weekly_jump";
 
-    public bool IsEnabled(RuleLimits limits) => limits.WeeklyJump.Enabled;
+    public RuleRecord Record { get; } = new WeeklyJumpRecord();
+
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.WeeklyJump;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) => WatchedSeries.Of(subject, subject.Limits.WeeklyJump.Quantities)
         .SelectMany(series => Evaluate(subject, series, subject.Limits.WeeklyJump))
@@ -27,15 +29,12 @@ public sealed class WeeklyJumpRule : IRule
     private IEnumerable<Finding> Evaluate(RuleSubject subject, WatchedSeries series, WeeklyJumpLimits limits)
     {
         var key = series.KeyOf(this);
-        var run = new FindingRun<Jump>(limits.OnDays, subject.Memory.Before<RunState<Jump>>(key));
+        var run = new FindingRun<Jump>(limits.OnDays, limits.OffDays, subject.Memory.Before<RunState<Jump>>(key));
         for (var index = subject.First; index < series.Days.Count; index++)
         {
             var day = series.Days[index];
-            if (day.Plan.IsAwayOrReturning())
-            {
-                run.End();
-            }
-            else if (Read(series.Days, index, limits) is { } jump)
+            run.Watch(PlanMutes.Of(Name, day.Plan), day.Date);
+            if (Read(series.Days, index, limits) is { } jump)
             {
                 run.Read(day.Date, jump, Raises(jump, limits), jump.Change >= Math.Min(limits.Return, limits.Raise));
             }
@@ -43,7 +42,7 @@ public sealed class WeeklyJumpRule : IRule
             subject.Memory.Keep(day.Date, key, run.State);
             if (run is { Since: { } since, Reading: { } read })
             {
-                yield return Find(series, day.Date, since, read, limits);
+                yield return Find(series, day.Date, since, read, limits).Unless(run.Muted);
             }
         }
     }
@@ -72,7 +71,7 @@ public sealed class WeeklyJumpRule : IRule
         date,
         Name,
         Region: null,
-        Severity.Notice,
+        limits.Severity.Severity(),
         since,
         read.Change,
         limits.Raise,
@@ -111,6 +110,7 @@ public sealed class WeeklyJumpRule : IRule
             new("look_back", limits.LookBackWeeks, "weeks"),
             new("covered_of_7_wanted", limits.CoveredOf7, "days"),
             new("on_days", limits.OnDays, "days"),
+            new("off_days", limits.OffDays, "days"),
         ]);
 
     /// <summary>What a date shows; loads in the series' unit.</summary>

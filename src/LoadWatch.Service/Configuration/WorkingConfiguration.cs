@@ -1,6 +1,7 @@
 using LoadWatch.Activities;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Delivery.Mail;
+using LoadWatch.Findings;
 using LoadWatch.People;
 using LoadWatch.Service.Arrivals;
 using NodaTime;
@@ -45,6 +46,13 @@ public sealed record WorkingConfiguration(
 
     /// <summary>Finds people and groups by how they are written.</summary>
     public required Subjects Subjects { get; init; }
+
+    /// <summary>Limits of single people, by id compared without regard to case; who is not among them has those of the group.</summary>
+    public IReadOnlyDictionary<string, RuleLimits> LimitsOfPeople { get; init; } = new Dictionary<string, RuleLimits>();
+
+    /// <summary>A person's group, with the limits that are in force for the person.</summary>
+    public Group GroupOf(Person person) =>
+        LimitsOfPeople.GetValueOrDefault(person.Id) is { } own ? Groups[person.Group] with { Limits = own } : Groups[person.Group];
 
     /// <summary>Whether files that were cut off are used of any of these inboxes.</summary>
     public bool Salvages(IEnumerable<string> inboxes) => Inboxes.Any(inbox => inbox.Salvage && inboxes.Contains(inbox.Name, StringComparer.Ordinal));

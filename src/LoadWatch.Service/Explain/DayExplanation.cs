@@ -36,8 +36,8 @@ public static class DayExplanation
 
         text.AppendLine(CultureInfo.InvariantCulture, $"{OneLine.Of(known.Name)}, {Words.Date(day.Date)}: {Words.Of(day.State)}{(day.StateSource is { } source ? $" ({source})" : "")}");
         AppendDecisions(text, session, known.Id, day.Date);
-        AppendTrends(text, day, configuration.Groups[known.Group].LoadQuantity);
-        ReferenceExplanation.Append(text, known, configuration.Groups[known.Group], TableBasis.Of(configuration, session).AnchorsOf(known), day.Date);
+        AppendTrends(text, day, configuration.GroupOf(known).LoadQuantity);
+        ReferenceExplanation.Append(text, known, configuration.GroupOf(known), TableBasis.Of(configuration, session).AnchorsOf(known), day.Date);
         var recorded = session.Activities.OfPerson(known.Id, day.Date, day.Date).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
         foreach (var activity in PersonTraining.Of(session, configuration, TableBasis.Of(configuration, session), known, day.Date, day.Date).Activities)
         {

@@ -79,7 +79,7 @@ public static class BasisParts
 
     private static IEnumerable<BasisPart> OfPerson(WorkingConfiguration configuration, Person person)
     {
-        var group = configuration.Groups[person.Group];
+        var group = configuration.GroupOf(person);
         return
         [
             new(person.Id, Profile, JsonSerializer.Serialize(new { person.BirthYear, person.Sex, Zone = person.Zone.Id }, Json)),

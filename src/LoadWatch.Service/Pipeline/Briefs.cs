@@ -122,7 +122,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
             .Select(alert => News(alert, news[alert.Id].ToList()))
             .Where(item => item.Alert.State is AlertState.Unacknowledged or AlertState.Acknowledged || item.ReturnedSince)
             .ToList();
-        return new BriefSubject(person, configuration.Groups[person.Group], days, alerts, Remarks(days)) { Notes = Notes(session, person, through) };
+        return new BriefSubject(person, configuration.GroupOf(person), days, alerts, Remarks(days)) { Notes = Notes(session, person, through) };
     }
 
     /// <summary>Told for a week from the day on which each came to be a note.</summary>

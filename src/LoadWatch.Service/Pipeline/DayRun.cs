@@ -29,7 +29,7 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
     private const int QuestionDays = 60;
 
     private readonly PersonPlans plans = new(configuration);
-    private readonly Lazy<ReferencePeriods> periods = new(() => ReferencePeriods.Of(person, configuration.Groups[person.Group], basis.AnchorsOf(person)));
+    private readonly Lazy<ReferencePeriods> periods = new(() => ReferencePeriods.Of(person, configuration.GroupOf(person), basis.AnchorsOf(person)));
     private LocalDate? replacedTo;
     private IReadOnlyList<Day>? before;
     private LocalDate? next;
@@ -75,7 +75,7 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
         var since = before!.Count == 0 ? LocalDate.MinIsoValue : first;
         var tests = session.TableRows.OfPerson(person.Id, RowKind.Tests, since, to).Select(row => new DatedTest(row.Date, (TestRow)row.Content)).ToList();
         var counted = training.Activities.Where(activity => activity.Date <= through);
-        return PersonSeries.Continue(person, configuration.Groups[person.Group], before, [.. counted], tests, plans.Of(session, person, since, to), to, Changes(session, first, to));
+        return PersonSeries.Continue(person, configuration.GroupOf(person), before, [.. counted], tests, plans.Of(session, person, since, to), to, Changes(session, first, to));
     }
 
     private ReferenceChanges Changes(StoreSession session, LocalDate first, LocalDate to) => new(periods.Value, () => new RestatedSessions(

@@ -13,7 +13,7 @@ public class RuleBookTests
     public void RulesAreNamedAndInOrder() => Assert.Equal(
         [
             "load_ratio", "weekly_jump", "session_spike", "monotony", "hard_days", "falling_load", "stimulus_gap", "stimulus_low", "falling_capacity", "silence",
-            "not_usable", "function_test",
+            "not_usable", "function_test", "test_overdue",
         ],
         RuleBook.All.Select(rule => rule.Name));
 
@@ -77,10 +77,11 @@ public class RuleBookTests
             new() { Silence = new() { Enabled = false } },
             new() { NotUsable = new() { Enabled = false } },
             new() { FunctionTest = new() { Enabled = false } },
+            new() { TestOverdue = new() { Enabled = false } },
         ];
 
-        Assert.All(RuleBook.All, rule => Assert.True(rule.IsEnabled(Watched.Defaults)));
-        Assert.Equal(RuleBook.All.Select(rule => rule.Name), off.Select(limits => Assert.Single(RuleBook.All, rule => !rule.IsEnabled(limits)).Name));
+        Assert.All(RuleBook.All, rule => Assert.True(rule.LimitsOf(Watched.Defaults).Enabled));
+        Assert.Equal(RuleBook.All.Select(rule => rule.Name), off.Select(limits => Assert.Single(RuleBook.All, rule => !rule.LimitsOf(limits).Enabled).Name));
     }
 
     [Fact]
@@ -139,7 +140,7 @@ public class RuleBookTests
         object[] parts =
         [
             limits.LoadRatio, limits.WeeklyJump, limits.SessionSpike, limits.Monotony, limits.HardDays, limits.FallingLoad, limits.StimulusGap, limits.StimulusLow,
-            limits.FallingCapacity, limits.Silence, limits.NotUsable, limits.FunctionTest,
+            limits.FallingCapacity, limits.Silence, limits.NotUsable, limits.FunctionTest, limits.TestOverdue,
         ];
 
         Assert.All(parts, part => Validator.ValidateObject(part, new ValidationContext(part), validateAllProperties: true));
