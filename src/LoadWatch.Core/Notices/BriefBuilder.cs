@@ -18,36 +18,92 @@ public static class BriefBuilder
     /// <param name="inboxIsAway">A watched folder cannot be looked into: nobody is named for what may lie in it.</param>
     public static Brief Build(Contact contact, LocalDate date, IReadOnlyList<BriefSubject> subjects, IReadOnlyList<BriefLine> questions, bool inboxIsAway = false)
     {
+        var forms = BriefForms.On(contact, date);
         var shown = Shown(contact, subjects);
         var self = contact.Role == ContactRole.Self && shown.Count == 1;
-        var upTo = shown.Where(subject => subject.Days.Count > 0).Max(subject => (LocalDate?)subject.Days[^1].Date);
+        var upTo = UpTo(shown);
         var silent = CommonSilence.Of(shown, inboxIsAway);
-        var flagged = shown.Where(subject => ToLookAt(subject) && !(silent.Contains(subject) && CommonSilence.IsOnlySilent(subject))).OrderByDescending(Worst).ToList();
         var asked = CommonSilence.Lines(shown, silent).Concat(questions).ToList();
-        return new Brief
+        var brief = Bare(contact, date, upTo, asked) with { People = [.. shown.Select(subject => subject.Person.Id)] };
+        var first = new FirstLine(shown, upTo, asked, self) { Silent = silent.Count };
+        if (forms.Contains(BriefForm.Daily))
         {
-            ContactId = contact.Id,
-            ContactName = OneLine.Of(contact.Name),
-            Date = date,
-            DataUpTo = upTo,
-            FirstLine = FirstLine.Of(shown, flagged, silent.Count, upTo, asked, self),
-            Flagged = [.. Named(flagged).Select(subject => Flag(subject, contact.Role, upTo ?? date.PlusDays(-1), self))],
-            FlaggedBeyond = Math.Max(0, flagged.Count - FlaggedAtMost),
-            Returned = [.. shown.SelectMany(subject => Returned(subject, self))],
-            Changed = [.. shown.SelectMany(subject => Changed(subject, self))],
-            Questions = [.. asked.Select(line => line with { Subject = OneLine.Of(line.Subject), Sentence = OneLine.Sentence(line.Sentence) })],
-            Groups = Groups(contact, shown, upTo ?? date.PlusDays(-1), self),
-        };
+            var flagged = ToLookAt(shown, silent);
+            first = first with { Flagged = flagged };
+            brief = Daily(brief, contact, shown, flagged, upTo ?? date.PlusDays(-1), self);
+        }
+
+        if (forms.Contains(BriefForm.ClassSheet))
+        {
+            brief = brief with { Sheets = ClassSheets.Of(shown, date, ViewOf(contact, shown)) };
+            first = first with { Sheets = brief.Sheets };
+        }
+
+        if (forms.Contains(BriefForm.CallList))
+        {
+            brief = brief with { Calls = CallLists.Of(shown, silent, date, upTo ?? date.PlusDays(-1), ViewOf(contact, shown)) };
+            first = first with { Calls = brief.Calls };
+        }
+
+        var week = forms.Contains(BriefForm.Weekly) && upTo is { } last ? BriefWeeks.Of(shown, date, last, ByGroup(contact, shown), self) : null;
+        return brief with { Week = week, NothingIsKnown = first.NothingIsKnown, FirstLine = (first with { HasWeek = week is not null }).Write() };
+    }
+
+    /// <summary>Ids of those who get a picture: they want more days than others (<see cref="BriefDays.OfPicture"/>).</summary>
+    public static IReadOnlySet<string> Pictured(Contact contact, LocalDate date, IReadOnlyList<BriefSubject> subjects, bool inboxIsAway)
+    {
+        if (!BriefForms.On(contact, date).Contains(BriefForm.Daily))
+        {
+            return new HashSet<string>(StringComparer.Ordinal);
+        }
+
+        var shown = Shown(contact, subjects);
+        return Named(ToLookAt(shown, CommonSilence.Of(shown, inboxIsAway))).Select(subject => subject.Person.Id).ToHashSet(StringComparer.Ordinal);
+    }
+
+    private static LocalDate? UpTo(List<BriefSubject> shown) => shown.Where(subject => subject.Days.Count > 0).Max(subject => (LocalDate?)subject.Days[^1].Date);
+
+    private static RoleView ViewOf(Contact contact, List<BriefSubject> shown) => RoleView.Of(contact.Role, shown.Count);
+
+    private static Brief Bare(Contact contact, LocalDate date, LocalDate? upTo, List<BriefLine> asked) => new()
+    {
+        ContactId = contact.Id,
+        ContactName = OneLine.Of(contact.Name),
+        Date = date,
+        DataUpTo = upTo,
+        FirstLine = "",
+        Flagged = [],
+        FlaggedBeyond = 0,
+        Returned = [],
+        Questions = [.. asked.Select(line => line with { Subject = OneLine.Of(line.Subject), Sentence = OneLine.Sentence(line.Sentence) })],
+        Groups = [],
+    };
+
+    private static Brief Daily(Brief bare, Contact contact, List<BriefSubject> shown, List<BriefSubject> flagged, LocalDate upTo, bool self) => bare with
+    {
+        Flagged = [.. Named(flagged).Select(subject => Flag(subject, contact.Role, upTo, self))],
+        FlaggedBeyond = Math.Max(0, flagged.Count - FlaggedAtMost),
+        Returned = [.. shown.SelectMany(subject => Returned(subject, self))],
+        Changed = [.. shown.SelectMany(subject => Changed(subject, self))],
+        Groups = Groups(contact, shown, upTo, self),
+    };
+
+    /// <summary>Whoever is only silent, and not alone, is told of in common.</summary>
+    private static List<BriefSubject> ToLookAt(List<BriefSubject> shown, IReadOnlyList<BriefSubject> silent)
+    {
+        var together = silent.Select(subject => subject.Person.Id).ToHashSet(StringComparer.Ordinal);
+        return [.. shown.Where(subject => ToLookAt(subject) && !(together.Contains(subject.Person.Id) && CommonSilence.IsOnlySilent(subject))).OrderByDescending(Worst)];
     }
 
     /// <summary>Standing and told: one that is shelved is not.</summary>
     internal static bool IsActive(AlertNews news) => AlertLife.IsActive(news.Alert.State) && news.Alert.ShelvedUntil is null;
 
-    /// <summary>Active alerts, warnings first, then by rule and region.</summary>
+    /// <summary>Active alerts, the gravest first: warnings, what nobody has seen yet, then by the rank of the rule.</summary>
     internal static IEnumerable<AlertNews> Active(BriefSubject subject) => subject.Alerts
         .Where(IsActive)
         .OrderByDescending(news => news.Alert.Severity)
-        .ThenBy(news => RuleTexts.Order(news.Alert.Key.Rule))
+        .ThenBy(news => news.Alert.State == AlertState.Acknowledged)
+        .ThenBy(news => RuleTexts.Rank(news.Alert.Key.Rule))
         .ThenBy(news => news.Alert.Id, StringComparer.Ordinal);
 
     /// <summary>The name to show: the person's own, or "You"; the id for a name of which nothing can be shown.</summary>
@@ -105,7 +161,11 @@ public static class BriefBuilder
         RuleTexts.Consider(news.Alert.Key, self),
         RuleTexts.Decides(role),
         news.IsNew,
-        news.Alert.State == AlertState.Acknowledged);
+        news.Alert.State == AlertState.Acknowledged)
+    {
+        Named = RuleTexts.Named(news.Alert.Key, self),
+        Raised = news.Alert.Raised,
+    };
 
     private static IEnumerable<BriefLine> Returned(BriefSubject subject, bool self) => subject.Alerts
         .Where(news => news.ReturnedSince && !IsActive(news))
@@ -123,13 +183,12 @@ public static class BriefBuilder
     private static DayPlan PlanOf(BriefSubject subject) => subject.Days.Count == 0 ? DayPlan.None : subject.Days[^1].Plan;
 
     private static IReadOnlyList<BriefGroup> Groups(Contact contact, List<BriefSubject> shown, LocalDate upTo, bool self) =>
-    [
-        .. shown
-            .GroupBy(subject => subject.Group.Id, StringComparer.Ordinal)
-            .OrderBy(group => Place(contact.Groups, group.Key))
-            .ThenBy(group => group.Key, StringComparer.Ordinal)
-            .Select(group => Table(group.First().Group, group, upTo, RoleView.Of(contact.Role, shown.Count), self)),
-    ];
+        [.. ByGroup(contact, shown).Select(group => Table(group.First().Group, group, upTo, ViewOf(contact, shown), self))];
+
+    private static IOrderedEnumerable<IGrouping<string, BriefSubject>> ByGroup(Contact contact, List<BriefSubject> shown) => shown
+        .GroupBy(subject => subject.Group.Id, StringComparer.Ordinal)
+        .OrderBy(group => Place(contact.Groups, group.Key))
+        .ThenBy(group => group.Key, StringComparer.Ordinal);
 
     private static BriefGroup Table(Group group, IEnumerable<BriefSubject> members, LocalDate upTo, RoleView view, bool self) => new(
         group.Id,

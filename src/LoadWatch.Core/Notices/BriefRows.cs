@@ -36,10 +36,10 @@ internal static class BriefRows
             subject.Person.Id,
             BriefBuilder.NameOf(subject.Person, self),
             BriefBuilder.ToLookAt(subject),
-            subject.Days.Where(day => day.State == DayState.Recorded).Max(day => (LocalDate?)day.Date),
-            today?.Acute,
+            PersonNotes.LastRecorded(subject),
+            SoFar(days, upTo),
             back is null ? today?.ChronicBefore : back.UsualWeek,
-            back is null ? today?.RatioUncoupled : null,
+            back is null && known == WeekDays ? today?.RatioUncoupled : null,
             known,
             EverHeavy(days, upTo, legs) ? legs?.DaysSince : null,
             legs?.Days28,
@@ -58,12 +58,24 @@ internal static class BriefRows
             day?.Regions.GetValueOrDefault(BodyRegion.Legs)?.HeavyOrFast);
     }
 
+    /// <summary>Load of the known days of the last 7, not scaled up: a week with an open end is told as it stands. Null when none is known.</summary>
+    public static double? SoFar(Dictionary<LocalDate, Day> days, LocalDate upTo)
+    {
+        var loads = Enumerable.Range(0, WeekDays).Select(back => days.GetValueOrDefault(upTo.PlusDays(-back))?.Load).OfType<double>().ToList();
+        return loads.Count == 0 ? null : Significant.Round(loads.Sum());
+    }
+
     private static bool EverHeavy(Dictionary<LocalDate, Day> days, LocalDate upTo, RegionDay? legs) =>
         legs?.DaysSince is not null && NeverHeavy(days, upTo, legs) is null;
 
     /// <summary>Days without any, where the count began at the first covered day instead of at a heavy-or-fast one; else null.</summary>
     private static int? NeverHeavy(Dictionary<LocalDate, Day> days, LocalDate upTo, RegionDay? legs)
     {
+        if (legs is { Never: true, DaysSince: { } all })
+        {
+            return all;
+        }
+
         if (legs?.DaysSince is not { } since || !days.TryGetValue(upTo.PlusDays(-since), out var start))
         {
             return null;
@@ -102,7 +114,8 @@ internal static class BriefRows
     /// <summary>Told while a record is young, then no more: a person with heart rate alone is not reminded of it every morning.</summary>
     private static bool IsFirstUnseen(BriefSubject subject, Day? today) =>
         today?.Regions.GetValueOrDefault(BodyRegion.Legs, RegionDay.NotCovered).DaysSince is null
-        && subject.Days.Count(day => day.State == DayState.Recorded) is >= UnseenFrom and <= UnseenTo;
+        && subject.Days.Count(day => day.State == DayState.Recorded) is >= UnseenFrom and <= UnseenTo
+        && (subject.Days.Count < BriefDays.Usual || subject.Days[0].DaysSinceRecorded is null);
 
     private static IEnumerable<string> Own(BriefSubject subject, Day? today, ReturnPhase? back, int knownOf7, int? neverHeavyDays)
     {
@@ -121,7 +134,7 @@ internal static class BriefRows
             yield return $"shelved until {BriefNumbers.Day(news.Alert.ShelvedUntil)}: {RuleTexts.Named(news.Alert.Key, self: false)}";
         }
 
-        if (subject.Days.All(day => day.State != DayState.Recorded))
+        if (PersonNotes.LastRecorded(subject) is null)
         {
             yield return "nothing recorded yet";
             yield break;

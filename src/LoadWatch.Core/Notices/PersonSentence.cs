@@ -1,0 +1,48 @@
+namespace LoadWatch.Notices;
+
+/// <summary>Folds what is to be said of one person into one sentence.</summary>
+internal static class PersonSentence
+{
+    /// <summary>Further reasons that are named; the rest is counted.</summary>
+    private const int AlsoAtMost = 2;
+
+    public static string What(FlaggedPerson person)
+    {
+        var also = Also([.. person.Reasons.Skip(1)]);
+        return also is null ? Part(person.Reasons[0].Sentence) : $"{Part(person.Reasons[0].Sentence)}; also {also}";
+    }
+
+    /// <summary>Several sentences as one, without the last full stop.</summary>
+    public static string Part(string text) => OneLine.Of(text).TrimEnd('.').Split(". ").Aggregate((told, next) => $"{told}; {Lowered(next)}");
+
+    public static string Since(FlaggedReason reason) => (reason.IsNew, reason.Raised) switch
+    {
+        (true, _) => "new",
+        (_, { } raised) => $"since {BriefNumbers.Day(raised)}",
+        _ => "",
+    };
+
+    private static string? Also(IReadOnlyList<FlaggedReason> others)
+    {
+        var named = others.Take(AlsoAtMost).Select(Named).ToList();
+        return (named.Count, others.Count - named.Count) switch
+        {
+            (0, _) => null,
+            (_, 0) => string.Join(" and ", named),
+            var (_, more) => $"{string.Join(", ", named)} and {more} more",
+        };
+    }
+
+    private static string Named(FlaggedReason reason)
+    {
+        var words = reason.Named.Length > 0 ? OneLine.Of(reason.Named) : Lowered(Part(reason.Sentence));
+        return (reason.IsNew, reason.IsSeen) switch
+        {
+            (true, _) => $"{words} (new)",
+            (_, true) => $"{words} (seen)",
+            _ => words,
+        };
+    }
+
+    private static string Lowered(string text) => text.Length == 0 ? text : char.ToLowerInvariant(text[0]) + text[1..];
+}
