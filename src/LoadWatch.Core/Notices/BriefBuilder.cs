@@ -9,8 +9,8 @@ namespace LoadWatch.Notices;
 /// <summary>Builds one contact's brief from what is known. Pure: the same values give the same brief, whatever their order.</summary>
 public static class BriefBuilder
 {
-    /// <summary>People to act on that one brief names; the rest is counted.</summary>
-    public const int FlaggedAtMost = 10;
+    /// <summary>People to act on that one brief names, those to call among them; the rest is counted.</summary>
+    public const int RowsAtMost = 10;
 
     /// <param name="date">The contact's local date on which the brief is due.</param>
     /// <param name="subjects">People; those outside the contact's groups or people are left out.</param>
@@ -26,26 +26,29 @@ public static class BriefBuilder
         var asked = CommonSilence.Lines(shown, silent).Concat(questions).ToList();
         var brief = Bare(contact, date, upTo, asked) with { People = [.. shown.Select(subject => subject.Person.Id)] };
         var first = new FirstLine(shown, upTo, asked, self) { Silent = silent.Count };
-        if (forms.Contains(BriefForm.Daily))
-        {
-            var flagged = ToLookAt(shown, silent);
-            first = first with { Flagged = flagged };
-            brief = Daily(brief, contact, shown, flagged, upTo ?? date.PlusDays(-1), self);
-        }
-
+        var last = upTo ?? date.PlusDays(-1);
         if (forms.Contains(BriefForm.ClassSheet))
         {
             brief = brief with { Sheets = ClassSheets.Of(shown, date, ViewOf(contact, shown)) };
             first = first with { Sheets = brief.Sheets };
         }
 
+        var flagged = ToLookAt(contact, date, shown, silent);
         if (forms.Contains(BriefForm.CallList))
         {
-            brief = brief with { Calls = CallLists.Of(shown, silent, date, upTo ?? date.PlusDays(-1), ViewOf(contact, shown)) };
+            var room = forms.Contains(BriefForm.Daily) ? Math.Max(RowsAtMost / 2, RowsAtMost - flagged.Count) : RowsAtMost;
+            IReadOnlyList<BriefSubject> others = forms.Contains(BriefForm.Daily) ? [.. shown.ExceptBy(flagged.Select(subject => subject.Person.Id), subject => subject.Person.Id, StringComparer.Ordinal)] : shown;
+            brief = brief with { Calls = CallLists.Of(others, silent, date, last, room) };
             first = first with { Calls = brief.Calls };
         }
 
-        var week = forms.Contains(BriefForm.Weekly) && upTo is { } last ? BriefWeeks.Of(shown, date, last, ByGroup(contact, shown), self) : null;
+        if (forms.Contains(BriefForm.Daily))
+        {
+            first = first with { Flagged = flagged };
+            brief = Daily(brief, contact, shown, flagged, last, self);
+        }
+
+        var week = forms.Contains(BriefForm.Weekly) && upTo is not null ? BriefWeeks.Of(shown, date, last, ByGroup(contact, shown), self) : null;
         return brief with { Week = week, NothingIsKnown = first.NothingIsKnown, FirstLine = (first with { HasWeek = week is not null }).Write() };
     }
 
@@ -58,7 +61,7 @@ public static class BriefBuilder
         }
 
         var shown = Shown(contact, subjects);
-        return Named(ToLookAt(shown, CommonSilence.Of(shown, inboxIsAway))).Select(subject => subject.Person.Id).ToHashSet(StringComparer.Ordinal);
+        return Named(ToLookAt(contact, date, shown, CommonSilence.Of(shown, inboxIsAway)), RowsAtMost).Select(subject => subject.Person.Id).ToHashSet(StringComparer.Ordinal);
     }
 
     private static LocalDate? UpTo(List<BriefSubject> shown) => shown.Where(subject => subject.Days.Count > 0).Max(subject => (LocalDate?)subject.Days[^1].Date);
@@ -79,20 +82,31 @@ public static class BriefBuilder
         Groups = [],
     };
 
-    private static Brief Daily(Brief bare, Contact contact, List<BriefSubject> shown, List<BriefSubject> flagged, LocalDate upTo, bool self) => bare with
+    private static Brief Daily(Brief bare, Contact contact, List<BriefSubject> shown, List<BriefSubject> flagged, LocalDate upTo, bool self)
     {
-        Flagged = [.. Named(flagged).Select(subject => Flag(subject, contact.Role, upTo, self))],
-        FlaggedBeyond = Math.Max(0, flagged.Count - FlaggedAtMost),
-        Returned = [.. shown.SelectMany(subject => Returned(subject, self))],
-        Changed = [.. shown.SelectMany(subject => Changed(subject, self))],
-        Groups = Groups(contact, shown, upTo, self),
-    };
+        var room = RowsAtMost - (bare.Calls?.Calls.Count ?? 0);
+        return bare with
+        {
+            Flagged = [.. Named(flagged, room).Select(subject => Flag(subject, contact.Role, upTo, self))],
+            FlaggedBeyond = Math.Max(0, flagged.Count - room),
+            Returned = [.. shown.SelectMany(subject => Returned(subject, self))],
+            Changed = [.. shown.SelectMany(subject => Changed(subject, self))],
+            Groups = Groups(contact, shown, upTo, self),
+        };
+    }
 
-    /// <summary>Whoever is only silent, and not alone, is told of in common.</summary>
-    private static List<BriefSubject> ToLookAt(List<BriefSubject> shown, IReadOnlyList<BriefSubject> silent)
+    /// <summary>Warnings first. Whoever is only silent, and not alone, is told of in common; whoever is only to be called, in the call list.</summary>
+    private static List<BriefSubject> ToLookAt(Contact contact, LocalDate date, List<BriefSubject> shown, IReadOnlyList<BriefSubject> silent)
     {
         var together = silent.Select(subject => subject.Person.Id).ToHashSet(StringComparer.Ordinal);
-        return [.. shown.Where(subject => ToLookAt(subject) && !(together.Contains(subject.Person.Id) && CommonSilence.IsOnlySilent(subject))).OrderByDescending(Worst)];
+        var calls = BriefForms.On(contact, date).Contains(BriefForm.CallList);
+        return
+        [
+            .. shown
+                .Where(subject => ToLookAt(subject) && !(together.Contains(subject.Person.Id) && CommonSilence.IsOnlySilent(subject)))
+                .Where(subject => !calls || !CallLists.IsOnlyToCall(subject, date))
+                .OrderByDescending(Worst),
+        ];
     }
 
     /// <summary>Standing and told: one that is shelved is not.</summary>
@@ -123,7 +137,7 @@ public static class BriefBuilder
     {
         var people = PeopleOf(contact, subjects);
         var view = RoleView.Of(contact.Role, people.Count);
-        return [.. people.Select(subject => subject with { Alerts = [.. subject.Alerts.Where(news => view.ShowsRule(news.Alert.Key.Rule))], Notes = [.. subject.Notes.Where(note => view.ShowsRule(note.Rule))] })];
+        return [.. people.Select(subject => subject with { Alerts = [.. subject.Alerts.Where(news => view.ShowsRule(news.Alert.Key.Rule))], Notes = [.. subject.Notes.Where(note => view.ShowsRule(note.Rule))], Suppressed = [.. subject.Suppressed.Where(finding => view.ShowsRule(finding.Rule))] })];
     }
 
     private static List<BriefSubject> PeopleOf(Contact contact, IReadOnlyList<BriefSubject> subjects) =>
@@ -140,10 +154,10 @@ public static class BriefBuilder
     private static Severity Worst(BriefSubject subject) => subject.Alerts.Where(IsActive).Max(news => news.Alert.Severity);
 
     /// <summary>Where there are too many for one brief, the graver reasons are named; in the order of the brief.</summary>
-    private static IEnumerable<BriefSubject> Named(List<BriefSubject> flagged)
+    private static IEnumerable<BriefSubject> Named(List<BriefSubject> flagged, int room)
     {
-        var named = flagged.OrderByDescending(Worst).ThenBy(subject => Active(subject).Min(news => RuleTexts.Rank(news.Alert.Key.Rule))).Take(FlaggedAtMost).ToHashSet();
-        return flagged.Where(named.Contains);
+        var named = flagged.OrderByDescending(Worst).ThenBy(subject => Active(subject).Min(news => RuleTexts.Rank(news.Alert.Key.Rule))).Take(room).Select(subject => subject.Person.Id).ToHashSet(StringComparer.Ordinal);
+        return flagged.Where(subject => named.Contains(subject.Person.Id));
     }
 
     private static FlaggedPerson Flag(BriefSubject subject, ContactRole role, LocalDate upTo, bool self) =>

@@ -1,6 +1,8 @@
 using System.Globalization;
 using LoadWatch.Alerts;
 using LoadWatch.Days;
+using LoadWatch.Findings;
+using LoadWatch.Plans;
 using LoadWatch.Stimulus;
 using NodaTime;
 
@@ -132,6 +134,11 @@ internal static class BriefRows
         foreach (var news in subject.Alerts.Where(news => AlertLife.IsActive(news.Alert.State) && news.Alert.ShelvedUntil is not null).OrderBy(news => news.Alert.Id, StringComparer.Ordinal))
         {
             yield return $"shelved until {BriefNumbers.Day(news.Alert.ShelvedUntil)}: {RuleTexts.Named(news.Alert.Key, self: false)}";
+        }
+
+        foreach (var finding in subject.Suppressed.OrderBy(finding => RuleTexts.Order(finding.Rule)).Take(RemarksShown))
+        {
+            yield return RuleTexts.Quiet(finding.Key, QuietReason.SuppressedByPlan, today?.Plan ?? DayPlan.None, self: false);
         }
 
         if (PersonNotes.LastRecorded(subject) is null)

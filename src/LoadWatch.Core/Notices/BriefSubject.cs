@@ -23,6 +23,9 @@ public sealed record BriefSubject(
     /// <summary>Notes of the last date that are to be told.</summary>
     public IReadOnlyList<Finding> Notes { get; init; } = [];
 
+    /// <summary>What would hold on the last date if plan or answers did not turn its rule off.</summary>
+    public IReadOnlyList<Finding> Suppressed { get; init; } = [];
+
     /// <summary>Lines of the plan that cover the brief's date.</summary>
     public IReadOnlyList<PlanEntry> Planned { get; init; } = [];
 

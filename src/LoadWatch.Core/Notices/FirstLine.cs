@@ -48,7 +48,8 @@ internal sealed record FirstLine(IReadOnlyList<BriefSubject> Shown, LocalDate? U
     private string OfFlagged(IReadOnlyList<BriefSubject> flagged) => (Shown.Count, flagged.Count) switch
     {
         (0, _) => "Nobody is in this brief yet.",
-        (_, > 0) when Self => $"To look at: {string.Join("; ", BriefBuilder.Active(flagged[0]).Select(news => RuleTexts.Named(news.Alert.Key, self: true)))}.",
+        (_, > 0) when Self => $"To look at: {PersonSentence.Listed([.. BriefBuilder.Active(flagged[0]).Select(news => RuleTexts.Named(news.Alert.Key, self: true))])}.",
+        (_, > 0) when Silent > 0 => $"Recordings of {Silent} of {Shown.Count} do not come in; {flagged.Count} more to look at: {string.Join(", ", Counts(flagged))}.",
         (_, > 0) => $"{flagged.Count} of {Shown.Count} to look at: {string.Join(", ", Counts(flagged))}.",
         _ when NothingIsKnown && Self => "Nothing is known yet: no recording has come in.",
         _ when NothingIsKnown => $"Nothing is known yet: no recording of {People(Shown.Count)} has come in.",
@@ -62,8 +63,8 @@ internal sealed record FirstLine(IReadOnlyList<BriefSubject> Shown, LocalDate? U
 
     private bool IsAskedAbove => Flagged is { Count: 0 } && Shown.Count > 0 && !NothingIsKnown && Silent == 0;
 
-    /// <summary>Something is unknown or waits for an answer.</summary>
-    private bool IsOpen => Questions.Count > 0 || UnseenCount > 0;
+    /// <summary>Something is unknown, waits for an answer, or somebody is to be called.</summary>
+    private bool IsOpen => Questions.Count > 0 || UnseenCount > 0 || Calls?.Calls.Count > 0;
 
     private static string OfSheets(IReadOnlyList<ClassSheet> sheets)
     {

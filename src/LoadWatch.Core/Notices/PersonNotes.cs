@@ -1,6 +1,7 @@
 using System.Globalization;
 using LoadWatch.Days;
 using LoadWatch.Findings;
+using LoadWatch.Plans;
 using LoadWatch.Stimulus;
 using NodaTime;
 
@@ -27,14 +28,21 @@ internal static class PersonNotes
     /// <param name="date">Today, or the last date looked at.</param>
     public static string? Away(BriefSubject subject, LocalDate date, RoleView view)
     {
-        var known = subject.Days.LastOrDefault(day => day.Date <= date);
-        if ((subject.Today is { } today && known?.Date != date ? today.Absence : known?.Plan.Absence) is not { } absence)
+        if (Absence(subject, date) is not { } absence)
         {
             return null;
         }
 
         var since = subject.Days.Where(day => day.Date <= date).Reverse().TakeWhile(day => day.Plan.Absence == absence).LastOrDefault()?.Date;
         return since is { } from ? $"{view.Word(absence)} since {Long(from)}" : view.Word(absence);
+    }
+
+    public static bool IsAway(BriefSubject subject, LocalDate date) => Absence(subject, date) is not null;
+
+    private static AbsenceWord? Absence(BriefSubject subject, LocalDate date)
+    {
+        var known = subject.Days.LastOrDefault(day => day.Date <= date);
+        return subject.Today is { } today && known?.Date != date ? today.Absence : known?.Plan.Absence;
     }
 
     private static string? Gap(BriefSubject subject, BodyRegion region, LocalDate upTo)

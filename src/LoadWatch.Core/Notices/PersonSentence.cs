@@ -8,7 +8,7 @@ internal static class PersonSentence
 
     public static string What(FlaggedPerson person)
     {
-        var also = Also([.. person.Reasons.Skip(1)]);
+        var also = Listed([.. person.Reasons.Skip(1).Select(Named)]);
         return also is null ? Part(person.Reasons[0].Sentence) : $"{Part(person.Reasons[0].Sentence)}; also {also}";
     }
 
@@ -22,16 +22,13 @@ internal static class PersonSentence
         _ => "",
     };
 
-    private static string? Also(IReadOnlyList<FlaggedReason> others)
+    /// <summary>The first ones by name, the rest counted; null for none.</summary>
+    public static string? Listed(IReadOnlyList<string> names) => (names.Count, names.Count - AlsoAtMost) switch
     {
-        var named = others.Take(AlsoAtMost).Select(Named).ToList();
-        return (named.Count, others.Count - named.Count) switch
-        {
-            (0, _) => null,
-            (_, 0) => string.Join(" and ", named),
-            var (_, more) => $"{string.Join(", ", named)} and {more} more",
-        };
-    }
+        (0, _) => null,
+        (_, <= 0) => string.Join(" and ", names),
+        var (_, more) => $"{string.Join(", ", names.Take(AlsoAtMost))} and {more} more",
+    };
 
     private static string Named(FlaggedReason reason)
     {

@@ -49,7 +49,12 @@ public sealed class BriefPeople(WorkingConfiguration configuration, Instant now,
         {
             var through = DayUpdate.LastDateOver(person, now);
             var days = Days(person, BriefDays.Usual);
-            subject = new BriefSubject(person, configuration.GroupOf(person), days, [], Remarks(days)) { Notes = Notes(person, through) };
+            var findings = session.Findings.Unraised(person.Id, through);
+            subject = new BriefSubject(person, configuration.GroupOf(person), days, [], Remarks(days))
+            {
+                Notes = Notes(person, through, [.. findings.Where(IsNote)]),
+                Suppressed = [.. findings.Where(finding => finding.Severity == Severity.Suppressed)],
+            };
             recent[person.Id] = subject = WithBreak(subject);
         }
 
@@ -118,17 +123,18 @@ public sealed class BriefPeople(WorkingConfiguration configuration, Instant now,
     }
 
     /// <summary>Told for a week from the day on which each came to be a note.</summary>
-    private List<Finding> Notes(Person person, LocalDate date)
+    private List<Finding> Notes(Person person, LocalDate date, List<Finding> notes)
     {
-        var notes = session.Findings.Notes(person.Id, date);
         if (notes.Count == 0)
         {
             return [];
         }
 
-        var told = session.Findings.Notes(person.Id, date.PlusDays(-NoteDays)).Select(note => note.Key).ToHashSet();
+        var told = session.Findings.Unraised(person.Id, date.PlusDays(-NoteDays)).Where(IsNote).Select(note => note.Key).ToHashSet();
         return [.. notes.Where(note => !told.Contains(note.Key))];
     }
+
+    private static bool IsNote(Finding finding) => finding.Severity == Severity.Note;
 
     private static List<string> Remarks(IReadOnlyList<Day> days)
     {

@@ -241,6 +241,15 @@ public sealed class BriefBuilderTests
     }
 
     [Fact]
+    public void WhatThePlanHoldsBackIsSaidInTheRowAndFlagsNobody()
+    {
+        var held = new Finding("a", Today, "load_ratio", null, Severity.Suppressed, Today, 1.95, 1.8, "ratio", "Load is high.", new Evidence("a / b", "a choice", []));
+        var brief = Build(Subject("a", "Ann") with { Suppressed = [held] });
+        Assert.Equal("load well above the usual: not watched while away or returning", brief.Groups[0].Rows[0].Remark);
+        Assert.Empty(brief.Flagged);
+    }
+
+    [Fact]
     public void UnknownDaysStayUnknown()
     {
         var row = Build(Subject("a", "Ann") with { Days = Trends("a", 60, back => back < 3 ? null : 80, back => back < 3 ? null : false) }).Groups[0].Rows[0];
