@@ -101,6 +101,21 @@ internal static class MorningExamples
             []);
     }
 
+    /// <summary>A class of 24 of whom 14 are to be called.</summary>
+    public static Brief BusyDesk(params BriefForm[] forms)
+    {
+        var monday = Today.PlusDays(1);
+        var planned = new PlanEntry(PlanWord.Class, monday, monday, new LocalTime(10, 0), new LocalTime(11, 0), true, null);
+        return BriefBuilder.Build(
+            Contact(ContactRole.FrontDesk, "desk", "squad") with { Name = "Front desk", Forms = forms },
+            monday,
+            [
+                .. SquadNames.Select((name, place) => place < 14 ? Subject($"r{place:00}", name, StimulusGap($"r{place:00}"), place % 2 == 0 ? Silence($"r{place:00}") : LoadRatio($"r{place:00}")) : Subject($"r{place:00}", name))
+                    .Select(subject => subject with { Planned = [planned] }),
+            ],
+            []);
+    }
+
     private static BriefSubject SquadSubject(string name, int place)
     {
         var id = $"r{place:00}";
