@@ -6,11 +6,13 @@ namespace LoadWatch.Findings;
 /// <summary>Limits of the rule <c>stimulus_low</c>: too few heavy-or-fast days of a body region in 14 days. All a choice.</summary>
 public sealed record StimulusLowLimits : IDelayedLimits
 {
+    private static readonly IReadOnlyList<BodyRegion> LegsOnly = [BodyRegion.Legs];
+
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;
 
     /// <summary>Body regions that are watched: legs, trunk, arms.</summary>
-    public IReadOnlyList<BodyRegion> Regions { get; init; } = [BodyRegion.Legs];
+    public IReadOnlyList<BodyRegion> Regions { get; init; } = LegsOnly;
 
     /// <summary>Share of the person's usual heavy-or-fast days in 14 days; fewer raise it. 0 to 1.</summary>
     [Range(0.0, 1.0)]

@@ -73,6 +73,7 @@ public static class CommandLine
         BriefCommand.Create(),
         PeopleCommand.Create(),
         AlertsCommand.Create(),
+        RulesCommand.Create(),
         AckCommand.Create(),
         ShelveCommand.Create(),
         AwayCommand.Create(),

@@ -58,6 +58,7 @@ public sealed class ConfigurationReader
         var people = (roster ?? []).ToDictionary(person => person.Id, StringComparer.OrdinalIgnoreCase);
         var anchors = faults.Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList()));
         var devices = faults.Collect(() => roster is null || !HasDevices(file) ? DeviceBook.Empty : DevicesReader.Read(Resolve(file.Devices), file.Devices, people));
+        var limits = LimitsOfPeople(json, file, people, roster is not null);
         var contacts = ContactsReader.Read(file, groups, roster is null ? null : people, zone, faults);
         var administrators = AdministratorsReader.Read(file, zone, faults);
         var mail = new MailReader(Resolve, faults.Add).Read(file);
@@ -86,6 +87,8 @@ public sealed class ConfigurationReader
             Administrators = administrators,
             Mail = mail,
             Devices = devices!,
+            CommonLimits = file.Limits,
+            LimitsOfPeople = limits,
             Subjects = new Subjects(people, groups, devices!),
         };
     }
@@ -147,6 +150,29 @@ public sealed class ConfigurationReader
         }
 
         return groups;
+    }
+
+    private IReadOnlyDictionary<string, RuleLimits> LimitsOfPeople(byte[] json, LoadWatchFile file, Dictionary<string, Person> people, bool known)
+    {
+        foreach (var id in file.People.Keys.Where(id => known && !people.ContainsKey(id)))
+        {
+            faults.Add($"$.people.{id}", $"\"{id}\" is not in the roster{Nearest.Hint(id, people.Keys)}");
+        }
+
+        foreach (var twice in file.People.Keys.GroupBy(id => id, StringComparer.OrdinalIgnoreCase).Where(same => same.Count() > 1))
+        {
+            faults.Add($"$.people.{twice.Last()}", $"the person \"{twice.Key}\" stands above already");
+            return new Dictionary<string, RuleLimits>();
+        }
+
+        using var document = JsonDocument.Parse(json, ConfigurationJson.DocumentOptions);
+        var limits = LimitsMerge.OfPeople(document.RootElement, id => people.GetValueOrDefault(id)?.Group);
+        foreach (var (id, own) in limits)
+        {
+            CheckLimits(own, $"$.people.{id}.limits");
+        }
+
+        return limits;
     }
 
     private void CheckLoad(GroupEntry entry, IReadOnlyList<string> known, string at)

@@ -47,6 +47,9 @@ public sealed record LoadWatchFile
     /// <summary>Squads and classes.</summary>
     public IReadOnlyList<GroupEntry> Groups { get; init; } = [new GroupEntry()];
 
+    /// <summary>What differs for single people from their group, by the person's id in the roster.</summary>
+    public IReadOnlyDictionary<string, PersonEntry> People { get; init; } = new Dictionary<string, PersonEntry>();
+
     /// <summary>Who is told.</summary>
     public IReadOnlyList<ContactEntry> Contacts { get; init; } = [new ContactEntry()];
 
@@ -109,6 +112,9 @@ public sealed record GroupEntry
     /// <summary>The name that briefs show; blank shows the id.</summary>
     public string Name { get; init; } = "";
 
+    /// <summary>What it is: in a <c>clinic</c> the rules of monotony and of hard days are off, unless its own limits turn them on.</summary>
+    public GroupKind Kind { get; init; } = GroupKind.Squad;
+
     /// <summary>
     /// The quantity that is this group's load: banister_trimp, edwards_load, lucia_load, stagno_load, individual_trimp, foster_load, minutes, distance,
     /// distance_above_5_5_m_s, distance_above_7_m_s (of the speed bounds from 5.5 on), distance_above_80_percent_speed_max,
@@ -123,6 +129,19 @@ public sealed record GroupEntry
     public IReadOnlyList<string> LoadFallbacks { get; init; } = [];
 
     /// <summary>Limits that differ from the common ones; only the keys that differ.</summary>
+    public RuleLimits? Limits { get; init; }
+}
+
+public enum GroupKind
+{
+    Squad,
+    Clinic,
+}
+
+/// <summary>What differs for one person.</summary>
+public sealed record PersonEntry
+{
+    /// <summary>Limits that differ from those of the person's group; only the keys that differ.</summary>
     public RuleLimits? Limits { get; init; }
 }
 

@@ -38,7 +38,7 @@ public static class RangeCheck
     private static IEnumerable<(string Path, string Reason)> Inner(object inner, string path) => inner switch
     {
         string => [],
-        IDictionary => [],
+        IDictionary entries => entries.Keys.Cast<object>().SelectMany(key => entries[key] is { } entry && IsOurs(entry) ? Faults(entry, $"{path}.{key}") : []),
         IEnumerable list => list.Cast<object>().SelectMany((item, i) => IsOurs(item) ? Faults(item, $"{path}[{i}]") : []),
         _ => IsOurs(inner) ? Faults(inner, path) : [],
     };

@@ -47,6 +47,9 @@ public sealed record WorkingConfiguration(
     /// <summary>Finds people and groups by how they are written.</summary>
     public required Subjects Subjects { get; init; }
 
+    /// <summary>Limits of groups that set none of their own.</summary>
+    public RuleLimits CommonLimits { get; init; } = new();
+
     /// <summary>Limits of single people, by id compared without regard to case; who is not among them has those of the group.</summary>
     public IReadOnlyDictionary<string, RuleLimits> LimitsOfPeople { get; init; } = new Dictionary<string, RuleLimits>();
 

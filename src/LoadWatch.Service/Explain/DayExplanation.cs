@@ -2,6 +2,7 @@ using System.Globalization;
 using System.Text;
 using LoadWatch.Activities;
 using LoadWatch.Days;
+using LoadWatch.Findings;
 using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
@@ -36,6 +37,11 @@ public static class DayExplanation
 
         text.AppendLine(CultureInfo.InvariantCulture, $"{OneLine.Of(known.Name)}, {Words.Date(day.Date)}: {Words.Of(day.State)}{(day.StateSource is { } source ? $" ({source})" : "")}");
         AppendDecisions(text, session, known.Id, day.Date);
+        foreach (var quiet in NotWatched.Of(session.Days.OfPerson(known.Id, day.Date.PlusDays(-LoadCalendar.LookBackDays), day.Date), configuration.GroupOf(known).Limits))
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {quiet.Sentence(day.Date)}");
+        }
+
         AppendTrends(text, day, configuration.GroupOf(known).LoadQuantity);
         ReferenceExplanation.Append(text, known, configuration.GroupOf(known), TableBasis.Of(configuration, session).AnchorsOf(known), day.Date);
         var recorded = session.Activities.OfPerson(known.Id, day.Date, day.Date).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
@@ -47,7 +53,7 @@ public static class DayExplanation
         foreach (var finding in session.Findings.OfPerson(known.Id, day.Date, day.Date))
         {
             text.AppendLine();
-            text.AppendLine(CultureInfo.InvariantCulture, $"finding {finding.Rule}: {OneLine.Of(finding.Text)}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"finding {finding.Rule} ({Words.Of(finding.Severity)}): {OneLine.Of(finding.Text)}");
             AlertExplanation.Append(text, finding.Evidence);
         }
 

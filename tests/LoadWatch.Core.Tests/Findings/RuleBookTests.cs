@@ -85,6 +85,30 @@ public class RuleBookTests
     }
 
     [Fact]
+    public void TurningARuleOffOrChangingItsLimitsIsNeitherAReturnNorACorrection()
+    {
+        var (plan, hash) = (LoadWatch.Plans.DayPlan.None, RuleBook.LimitsHash("load_ratio", Watched.Defaults));
+        var other = Watched.Defaults with { LoadRatio = new() { Raise = 2 } };
+
+        Assert.Null(RuleBook.WhyQuiet("load_ratio", Watched.Defaults, plan, hash));
+        Assert.Null(RuleBook.WhyQuiet("load_ratio", other, plan, hashBefore: null));
+        Assert.Equal(QuietReason.LimitsChanged, RuleBook.WhyQuiet("load_ratio", other, plan, hash));
+        Assert.Equal(QuietReason.SuppressedByPlan, RuleBook.WhyQuiet("load_ratio", other, plan with { ReturnDay = 2 }, hash));
+        Assert.Equal(QuietReason.RuleOff, RuleBook.WhyQuiet("load_ratio", Watched.Defaults with { LoadRatio = new() { Enabled = false } }, plan, hash));
+        Assert.Equal(QuietReason.RuleOff, RuleBook.WhyQuiet("of_a_former_version", Watched.Defaults, plan, hash));
+    }
+
+    [Fact]
+    public void TheHashNamesTheLimitsOfOneRule()
+    {
+        var other = Watched.Defaults with { Silence = new() { ExtraDays = 3 } };
+
+        Assert.All(RuleBook.All, rule => Assert.Equal(rule.Name == "silence", RuleBook.LimitsHash(rule.Name, other) != RuleBook.LimitsHash(rule.Name, new RuleLimits())));
+        Assert.Matches("^[0-9a-f]{16}$", RuleBook.LimitsHash("silence", other));
+        Assert.Equal("", RuleBook.LimitsHash("of_a_former_version", other));
+    }
+
+    [Fact]
     public void QuantitiesOfAllRulesThatAreOnAreGathered()
     {
         var limits = new RuleLimits

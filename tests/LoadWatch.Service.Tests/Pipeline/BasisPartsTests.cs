@@ -8,11 +8,12 @@ namespace LoadWatch.Service.Tests.Pipeline;
 /// </summary>
 public sealed class BasisPartsTests
 {
-    private static readonly string[] OfConfiguration = ["People", "Groups", "Anchors", "Layouts", "Computation", "Devices", "Inboxes"];
+    private static readonly string[] OfConfiguration = ["People", "Groups", "Anchors", "Layouts", "Computation", "Devices", "Inboxes", "LimitsOfPeople"];
 
     private static readonly string[] WithoutRows =
     [
         "Folder", "Hash", "Text", "DataFolder", "PagesFolder", "NoticesFolder", "Contacts", "ScanEvery", "Settle", "LargestFileBytes", "Mail", "AllowNetworkDataFolder", "Administrators",
+        "CommonLimits", // Part of those of the groups.
         "Subjects", // Of people, groups and devices.
     ];
 
