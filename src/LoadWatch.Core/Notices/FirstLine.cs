@@ -55,7 +55,7 @@ internal sealed record FirstLine(IReadOnlyList<BriefSubject> Shown, LocalDate? U
         _ when NothingIsKnown => $"Nothing is known yet: no recording of {People(Shown.Count)} has come in.",
         _ when Silent > 0 => $"Recordings of {Silent} of {Shown.Count} do not come in; nothing else to act on.",
         _ when Self => IsOpen ? $"Nothing to act on{But}." : "All quiet: nothing to act on.",
-        _ => IsOpen ? $"Nobody to look at among {People(Shown.Count)}{But}." : $"All quiet: {People(Shown.Count)}, nothing to act on.",
+        _ => IsOpen ? $"Nothing to act on for {People(Shown.Count)}{But}." : $"All quiet: {People(Shown.Count)}, nothing to act on.",
     };
 
     /// <summary>The questions belong to the sentence that stands large where it has nothing else to say.</summary>

@@ -57,8 +57,8 @@ public sealed class BriefBuilderTests
     }
 
     [Theory]
-    [InlineData(1, "Nobody to look at among 1 person, but 1 question needs an answer.")]
-    [InlineData(2, "Nobody to look at among 1 person, but 2 questions need an answer.")]
+    [InlineData(1, "Nothing to act on for 1 person, but 1 question needs an answer.")]
+    [InlineData(2, "Nothing to act on for 1 person, but 2 questions need an answer.")]
     public void FilesThatNeedAnAnswerAreMentioned(int files, string expected)
     {
         var questions = Enumerable.Range(1, files).Select(n => new BriefLine($"{n}.fit", "nobody is named as its owner")).ToList();
@@ -69,7 +69,7 @@ public sealed class BriefBuilderTests
     public void QuietWithoutDataIsNotCalledQuietAlone()
     {
         var unknown = Subject("b", "Ben") with { Days = Trends("b", 60, back => back < 7 ? null : 80, _ => null) };
-        Assert.Equal("Nobody to look at among 2 people. 1 person without a known day in the last week.", Build(Subject("a", "Ann"), unknown).FirstLine);
+        Assert.Equal("Nothing to act on for 2 people. 1 person without a known day in the last week.", Build(Subject("a", "Ann"), unknown).FirstLine);
     }
 
     [Fact]
@@ -181,7 +181,7 @@ public sealed class BriefBuilderTests
     public void SomebodyWhoWatchesThemselvesIsCalledYou()
     {
         var brief = BriefBuilder.Build(Oneself("a"), Today, [Subject("a", "Ann", LoadRatio("a"), StimulusGap("a"))], []);
-        Assert.Equal("To look at: load well above your usual; no heavy or fast leg work lately.", brief.FirstLine);
+        Assert.Equal("To look at: load well above your usual and no heavy or fast leg work lately.", brief.FirstLine);
         Assert.Equal("You", Assert.Single(brief.Flagged).Name);
         Assert.Equal("you, with your clinician where one looks after you", brief.Flagged[0].Reasons[0].Decides);
         Assert.Contains("what you had planned", brief.Flagged[0].Reasons[0].Consider, StringComparison.Ordinal);

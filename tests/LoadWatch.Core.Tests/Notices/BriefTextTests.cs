@@ -99,7 +99,7 @@ public sealed class BriefTextTests
     {
         const string Name = "Maximiliana Theodosia von Hohenkirchen-Altwasser";
         var text = BriefText.Write(BriefBuilder.Build(Contact(ContactRole.Coach), Today, [Subject("a", Name, Silence("a"))], []));
-        Assert.Contains($"- {Name} (notice,\n", text, StringComparison.Ordinal);
+        Assert.Contains($"- {Name} (notice, since 27 Feb):\n", text, StringComparison.Ordinal);
         Assert.Contains("* Maximiliana Theodosia von…  ", text, StringComparison.Ordinal);
     }
 

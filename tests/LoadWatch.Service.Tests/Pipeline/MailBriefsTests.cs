@@ -35,7 +35,7 @@ public sealed class MailBriefsTests : IDisposable
     }
 
     [Theory]
-    [InlineData("initials", "- A. (warning)")]
+    [InlineData("initials", "- A. (warning, ")]
     [InlineData("none", "The page has the rest.")]
     public void WhatLeavesTheMachineHoldsTheNamesThatTheContactAsksFor(string names, string expected)
     {
