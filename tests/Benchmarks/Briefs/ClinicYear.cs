@@ -20,9 +20,9 @@ internal sealed record ClinicYear(string Root, int People)
     /// <summary>A Monday: week, call list and sheet are there.</summary>
     private static readonly LocalDate Today = new(2026, 6, 1);
 
-    public string ConfigPath => Path.Combine(Root, "loadwatch.json");
+    public static Instant Morning => Today.AtMidnight().PlusHours(7).InUtc().ToInstant();
 
-    public Instant Morning => Today.AtMidnight().PlusHours(7).InUtc().ToInstant();
+    public string ConfigPath => Path.Combine(Root, "loadwatch.json");
 
     public void Make()
     {
