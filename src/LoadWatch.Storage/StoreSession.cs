@@ -37,6 +37,7 @@ public sealed class StoreSession
         Recordings = new RecordingTable(this);
         Activities = new ActivityTable(this);
         Days = new DayTable(this);
+        Rooms = new TodaysRoomTable(this);
         Findings = new FindingTable(this);
         Evaluations = new EvaluationTable(this);
         Alerts = new AlertTable(this);
@@ -66,6 +67,8 @@ public sealed class StoreSession
     public ActivityTable Activities { get; }
 
     public DayTable Days { get; }
+
+    public TodaysRoomTable Rooms { get; }
 
     public FindingTable Findings { get; }
 

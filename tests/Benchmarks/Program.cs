@@ -6,6 +6,7 @@ using LoadWatch.Benchmarks.Imports;
 // dotnet run -c Release --project tests/Benchmarks -- --filter '*' --job short
 // dotnet run -c Release --project tests/Benchmarks -- import
 // dotnet run -c Release --project tests/Benchmarks -- worst
+// dotnet run -c Release --project tests/Benchmarks -- compute
 // dotnet run -c Release --project tests/Benchmarks -- decode
 // dotnet run -c Release --project tests/Benchmarks -- brief
 if (args is [ImportBenchmark.Name, .. var rest])
@@ -16,6 +17,11 @@ if (args is [ImportBenchmark.Name, .. var rest])
 if (args is [WorstFiles.Name])
 {
     return WorstFiles.Run();
+}
+
+if (args is [ComputeSpeed.Name])
+{
+    return ComputeSpeed.Run();
 }
 
 if (args is [DecodeTable.Name])

@@ -24,7 +24,7 @@ public static class ActivityComputation
     public static ActivityValues Compute(UsableRecording cut, Person person, AnchorBook anchors, ComputationSettings settings)
     {
         ArgumentNullException.ThrowIfNull(cut);
-        var date = LocalStart.Of(cut.Recording, person).Date;
+        var date = LocalStart.DateOf(cut.Recording, person);
         var usable = person.HeartRateIsValidOn(date)
             ? UpToMaximum(cut, HeartRateMaximum.On(date, person, anchors), settings.Quality)
             : new UsableRecording(WithoutHeartRate(cut.Recording), settings.UsableShareWanted, settings.Quality);

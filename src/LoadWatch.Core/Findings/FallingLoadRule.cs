@@ -5,6 +5,7 @@
 // Departures: the group's load stands for volume, and intensity is not looked at here.
 using System.Runtime.InteropServices;
 using LoadWatch.Days;
+using LoadWatch.Plans;
 using NodaTime;
 
 namespace LoadWatch.Findings;
@@ -59,10 +60,9 @@ public sealed class FallingLoadRule : IRule
             return null;
         }
 
-        var ordinary = PastWeek.Before(days, oldest - 1, limits.Weeks, KnownOf7).Where(one => one.IsOrdinary).ToList();
-        return ordinary.Count < limits.WeeksWanted || PastWeek.Median(ordinary) is not { } usual
-            ? null
-            : new Fall(days[index].Date, week.Value, loads.Count(load => load.HasValue), usual, ordinary.Count, Significant.Round(week.Value / usual));
+        return UsualWeek.Of(PastWeek.Before(days, oldest - 1, limits.Weeks, KnownOf7), limits.Weeks, limits.WeeksWanted) is { } usual
+            ? new Fall(days[index].Date, week.Value, loads.Count(load => load.HasValue), usual.Load, usual.Weeks, Significant.Round(week.Value / usual.Load))
+            : null;
     }
 
     /// <summary>Loads of the last days that are not set aside, newest first, and the index of the oldest.</summary>

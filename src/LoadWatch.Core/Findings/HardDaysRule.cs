@@ -91,5 +91,10 @@ public sealed class HardDaysRule : IRule
     private Finding Found(RuleSubject subject, LocalDate date, LocalDate since, double value, double limit, string unit, string text, Evidence evidence) =>
         new(subject.Person.Id, date, Name, Region: null, subject.Limits.HardDays.Severity.Severity(), since, value, limit, unit, text, evidence);
 
+    /// <summary>What was carried of a day with the row that had not ended, and nothing that stands: as if the limit had not been passed yet.</summary>
+    internal Carried RowAlone(Carried carried) => carried.Run<Standing>(Name) is { Row: { } row }
+        ? new Carried { Runs = new Dictionary<string, object> { [Name] = new Standing(null, null, row, null) } }
+        : Carried.Nothing;
+
     private sealed record Standing(LocalDate? Since, RunState<HardRow>? Rows, HardRow? Row, RunState<MatchCount>? Matches) : IStanding;
 }

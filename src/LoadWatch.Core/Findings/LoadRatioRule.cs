@@ -3,6 +3,7 @@
 // the limit of 1.8 uncoupled is 1.5 coupled: C = 4 U / (U + 3). That a limit is watched at all, its value, coverage and return value are
 // a choice: the ratio describes change and nothing else.
 using LoadWatch.Days;
+using LoadWatch.Plans;
 using NodaTime;
 
 namespace LoadWatch.Findings;

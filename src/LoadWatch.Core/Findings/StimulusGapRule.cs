@@ -2,6 +2,7 @@
 using LoadWatch.Days;
 using LoadWatch.People;
 using LoadWatch.Stimulus;
+using LoadWatch.Plans;
 using NodaTime;
 
 namespace LoadWatch.Findings;

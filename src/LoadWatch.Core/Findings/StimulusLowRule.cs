@@ -14,8 +14,6 @@ namespace LoadWatch.Findings;
 /// </summary>
 public sealed class StimulusLowRule : IRule
 {
-    private const int Window = 14;
-    private const int UsualDays = 56;
 
     public string Name => "stimulus_low";
 
@@ -30,6 +28,8 @@ public sealed class StimulusLowRule : IRule
     {
         var series = subject.Days.Select(day => day.Regions.GetValueOrDefault(region, RegionDay.NotCovered)).ToList();
         var first = series.FindIndex(day => day.DaysSince.HasValue);
+        var tally = new HeavyTally();
+        series.ForEach(day => tally.Add(day.HeavyOrFast));
         var key = $"{Name}/{BodyRegions.Word(region)}";
         var limits = subject.Limits.StimulusLow;
         var run = new FindingRun<Count>(limits.OnDays, limits.OffDays, subject.Memory.Before<RunState<Count>>(key));
@@ -55,34 +55,21 @@ public sealed class StimulusLowRule : IRule
         && gap.Regions.Contains(region)
         && seen.DaysSince >= StimulusGapLimit.For(subject.Person.AgeOn(day.Date), seen, gap).NoticeDays;
 
-    private static Count? Read(RuleSubject subject, List<RegionDay> series, int first, int index)
+    private static Count? Read(RuleSubject subject, HeavyTally tally, int index)
     {
         var limits = subject.Limits.StimulusLow;
-        var (heavy, known) = Heavy(series, index - Window + 1, index);
-        if (known < Significant.Round(limits.CoveredShare * Window))
+        var (heavy, known) = tally.Among(index, HeavyTally.WindowDays);
+        if (known < Significant.Round(limits.CoveredShare * HeavyTally.WindowDays))
         {
             return null;
         }
 
-        var (before, knownBefore) = Heavy(series, Math.Max(first, index - Window - UsualDays + 1), index - Window);
-        var usual = knownBefore < Significant.Round(limits.CoveredShare * UsualDays) ? (double?)null : Significant.Round((double)before / knownBefore * Window);
+        var usual = tally.Usual(index, limits.CoveredShare);
         var age = subject.Person.AgeOn(subject.Days[index].Date);
         var floor = age >= limits.OlderFrom ? limits.OlderFloorDays : limits.FloorDays;
         var limit = Math.Max(floor, Significant.Round(limits.UsualShare * (usual ?? 0)));
         var over = Math.Max(limit, Math.Min(limit + limits.ReturnExtraDays, usual ?? limit));
         return new Count(subject.Days[index].Date, heavy, known, usual, age, floor, limit, over);
-    }
-
-    private static (int Heavy, int Known) Heavy(List<RegionDay> series, int from, int to)
-    {
-        var (heavy, known) = (0, 0);
-        for (var index = Math.Max(0, from); index <= to; index++)
-        {
-            heavy += series[index].HeavyOrFast is true ? 1 : 0;
-            known += series[index].HeavyOrFast.HasValue ? 1 : 0;
-        }
-
-        return (heavy, known);
     }
 
     private Finding Find(RuleSubject subject, Day day, BodyRegion region, LocalDate since, Count count) => new(

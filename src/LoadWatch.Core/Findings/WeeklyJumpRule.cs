@@ -4,6 +4,7 @@
 // Departure from the plain change of a week: a light week, the off-season, travel, an absence, a return and a week without any load are stepped over, so that
 // a usual week after one of them is no jump; a week of which too little is known is not.
 using LoadWatch.Days;
+using LoadWatch.Plans;
 using NodaTime;
 
 namespace LoadWatch.Findings;
@@ -50,17 +51,10 @@ public sealed class WeeklyJumpRule : IRule
     private static Jump? Read(IReadOnlyList<Day> days, int index, WeeklyJumpLimits limits)
     {
         var acute = PastWeek.Before(days, index, 1, limits.CoveredOf7).Single().Load;
-        var weeks = PastWeek.Before(days, index - WeekDays, limits.LookBackWeeks, limits.CoveredOf7);
-        var before = weeks.FirstOrDefault(week => !week.IsSkipped);
-        if (days[index].Load is null || acute is null || before.Load is not { } load)
-        {
-            return null;
-        }
-
-        var ordinary = weeks.Where(week => week.IsOrdinary).Take(limits.Weeks).ToList();
-        return ordinary.Count < limits.Weeks
-            ? null
-            : new Jump(days[index].Date, acute.Value, before.UpTo, load, PastWeek.Median(ordinary)!.Value, Significant.Round((acute.Value - load) / load));
+        var weeks = PastWeek.Before(days, index - WeekDays, limits.LookBackWeeks, limits.CoveredOf7).ToList();
+        return days[index].Load is not null && WeekChange.Of(acute, weeks) is { } change && UsualWeek.Of(weeks, limits.Weeks, limits.Weeks) is { } usual
+            ? new Jump(days[index].Date, change.Acute, change.BeforeUpTo, change.Before, usual.Load, change.Fraction)
+            : null;
     }
 
     private static bool Raises(Jump jump, WeeklyJumpLimits limits) =>

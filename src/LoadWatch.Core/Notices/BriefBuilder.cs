@@ -1,5 +1,6 @@
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
+using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Plans;
 using NodaTime;
@@ -23,7 +24,10 @@ public static class BriefBuilder
         var self = contact.Role == ContactRole.Self && shown.Count == 1;
         var upTo = UpTo(shown);
         var silent = CommonSilence.Of(shown, inboxIsAway);
-        var asked = CommonSilence.Lines(shown, silent).Concat(questions).ToList();
+
+        // The week lists them itself.
+        var unseen = forms.Contains(BriefForm.Daily) && !forms.Contains(BriefForm.Weekly) ? UnseenAlerts.Lines(contact, date, shown, self) : [];
+        var asked = CommonSilence.Lines(shown, silent).Concat(unseen).Concat(questions).ToList();
         var brief = Bare(contact, date, upTo, asked) with { People = [.. shown.Select(subject => subject.Person.Id)] };
         var first = new FirstLine(shown, upTo, asked, self) { Silent = silent.Count };
         var last = upTo ?? date.PlusDays(-1);
@@ -109,8 +113,8 @@ public static class BriefBuilder
         ];
     }
 
-    /// <summary>Standing and told: one that is shelved is not.</summary>
-    internal static bool IsActive(AlertNews news) => AlertLife.IsActive(news.Alert.State) && news.Alert.ShelvedUntil is null;
+    /// <summary>Standing and told: one that is shelved or suppressed is not.</summary>
+    internal static bool IsActive(AlertNews news) => news.Alert.IsTold;
 
     /// <summary>Active alerts, the gravest first: warnings, what nobody has seen yet, then by the rank of the rule.</summary>
     internal static IEnumerable<AlertNews> Active(BriefSubject subject) => subject.Alerts

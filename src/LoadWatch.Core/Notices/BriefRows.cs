@@ -2,6 +2,7 @@ using System.Globalization;
 using LoadWatch.Alerts;
 using LoadWatch.Days;
 using LoadWatch.Findings;
+using LoadWatch.Limits;
 using LoadWatch.Plans;
 using LoadWatch.Stimulus;
 using NodaTime;
@@ -46,7 +47,7 @@ internal static class BriefRows
             EverHeavy(days, upTo, legs) ? legs?.DaysSince : null,
             legs?.Days28,
             [.. Enumerable.Range(1 - StripDays, StripDays).Select(offset => DayOf(days, upTo.PlusDays(offset)))],
-            Remark(subject, [.. Absent(days, upTo, view), .. Own(subject, today, back, known, NeverHeavy(days, upTo, legs))]));
+            Remark(subject, [.. Absent(days, upTo, view), .. RoomOf(subject, upTo, self), .. Own(subject, today, back, known, NeverHeavy(days, upTo, legs))]));
     }
 
     /// <summary>A date without a day is unknown.</summary>
@@ -96,6 +97,15 @@ internal static class BriefRows
         return remark.Length == 0 ? null : remark;
     }
 
+    /// <summary>Told to whoever reads about themselves, where there is a figure.</summary>
+    private static IEnumerable<string> RoomOf(BriefSubject subject, LocalDate upTo, bool self)
+    {
+        if (self && subject.Room is { Load: not null } room && room.Date == upTo.PlusDays(1))
+        {
+            yield return $"{RoomWords.Of(room)}: {RoomWords.Meaning}";
+        }
+    }
+
     /// <summary><c>away since 2 March</c>.</summary>
     private static IEnumerable<string> Absent(Dictionary<LocalDate, Day> days, LocalDate upTo, RoleView view)
     {
@@ -119,6 +129,8 @@ internal static class BriefRows
         && subject.Days.Count(day => day.State == DayState.Recorded) is >= UnseenFrom and <= UnseenTo
         && (subject.Days.Count < BriefDays.Usual || subject.Days[0].DaysSinceRecorded is null);
 
+    private static bool IsHeldBack(AlertNews news) => news.Alert.Watch == AlertWatch.SuppressedByDesign && AlertLife.IsActive(news.Alert.State);
+
     private static IEnumerable<string> Own(BriefSubject subject, Day? today, ReturnPhase? back, int knownOf7, int? neverHeavyDays)
     {
         if (back is not null)
@@ -136,7 +148,12 @@ internal static class BriefRows
             yield return $"shelved until {BriefNumbers.Day(news.Alert.ShelvedUntil)}: {RuleTexts.Named(news.Alert.Key, self: false)}";
         }
 
-        foreach (var finding in subject.Suppressed.OrderBy(finding => RuleTexts.Order(finding.Rule)).Take(RemarksShown))
+        foreach (var news in subject.Alerts.Where(IsHeldBack).OrderBy(news => news.Alert.Id, StringComparer.Ordinal))
+        {
+            yield return $"not watched for now by plan or answers: {RuleTexts.Named(news.Alert.Key, self: false)}";
+        }
+
+        foreach (var finding in subject.Suppressed.Where(finding => !subject.Alerts.Any(news => news.Alert.Key == finding.Key)).OrderBy(finding => RuleTexts.Order(finding.Rule)).Take(RemarksShown))
         {
             yield return RuleTexts.Quiet(finding.Key, QuietReason.SuppressedByPlan, today?.Plan ?? DayPlan.None, self: false);
         }

@@ -1,5 +1,6 @@
 using LoadWatch.Alerts;
 using LoadWatch.Days;
+using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Stimulus;
 using NodaTime;
@@ -12,9 +13,6 @@ internal static class BriefWeeks
     private const int WeekDays = 7;
     private const int MonthDays = 28;
     private const int NamedAtMost = 10;
-
-    /// <summary>An alert that nobody acknowledged for longer stands out. A choice.</summary>
-    private const int StandingDays = 14;
 
     /// <summary>So many heavy-or-fast leg days of 28 were a habit, and so many must be known to say that it fell to half. Choices.</summary>
     private const int HabitDays = 4;
@@ -81,7 +79,7 @@ internal static class BriefWeeks
     }
 
     private static IEnumerable<BriefLine> Standing(BriefSubject subject, LocalDate date, bool self) => BriefBuilder.Active(subject)
-        .Where(news => news.Alert.State == AlertState.Unacknowledged && Period.DaysBetween(news.Alert.Raised, date) > StandingDays)
+        .Where(news => StaleAlerts.IsStale(news.Alert, date))
         .Select(news => new BriefLine(
             BriefBuilder.NameOf(subject.Person, self),
             OneLine.Sentence($"{RuleTexts.Named(news.Alert.Key, self)}: standing since {BriefNumbers.Day(news.Alert.Raised)}, {Period.DaysBetween(news.Alert.Raised, date)} days, and not acknowledged")));

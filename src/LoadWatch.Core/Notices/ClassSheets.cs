@@ -1,7 +1,8 @@
+using LoadWatch.Limits;
 using LoadWatch.People;
 using LoadWatch.Plans;
-using NodaTime;
 using NodaTime.Text;
+using NodaTime;
 
 namespace LoadWatch.Notices;
 
@@ -47,7 +48,10 @@ internal static class ClassSheets
         var notes = away is null ? Notes(subject, date.PlusDays(-1)).Distinct(StringComparer.Ordinal).ToList() : [away];
         var shown = notes.Count > NotesShown ? notes.Take(NotesShown).Append($"and {notes.Count - NotesShown} more") : notes;
         var note = string.Join("; ", shown);
-        return new ClassPerson(subject.Person.Id, BriefBuilder.NameOf(subject.Person, self: false), note.Length == 0 ? null : OneLine.Sentence(note), away is not null);
+        return new ClassPerson(subject.Person.Id, BriefBuilder.NameOf(subject.Person, self: false), note.Length == 0 ? null : OneLine.Sentence(note), away is not null)
+        {
+            Room = away is null && subject.Room is { Load: not null } room && room.Date == date ? OneLine.Sentence(RoomWords.Of(room)) : null,
+        };
     }
 
     private static IEnumerable<string> Notes(BriefSubject subject, LocalDate upTo)

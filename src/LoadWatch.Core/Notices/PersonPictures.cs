@@ -2,6 +2,7 @@
 // packages", The American Statistician 50:361-365 (from memory). The number of weeks is a choice.
 using LoadWatch.Days;
 using LoadWatch.Findings;
+using LoadWatch.Loads;
 using NodaTime;
 
 namespace LoadWatch.Notices;

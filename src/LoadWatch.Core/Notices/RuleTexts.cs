@@ -1,3 +1,4 @@
+using LoadWatch.Alerts;
 using LoadWatch.Findings;
 using LoadWatch.People;
 using LoadWatch.Plans;
@@ -45,12 +46,14 @@ public static class RuleTexts
     public static string Returned(AlertNews news, RuleLimits limits, DayPlan plan, bool self)
     {
         var key = news.Alert.Key;
-        return RuleBook.WhyQuiet(key.Rule, limits, plan, hashBefore: null) switch
+        return (news.Ended, RuleBook.WhyQuiet(key.Rule, limits, plan, hashBefore: null)) switch
         {
-            QuietReason.RuleOff => Quiet(key, QuietReason.RuleOff, plan, self),
+            (AlertChangeReason.RuleSwitchedOff, _) or (_, QuietReason.RuleOff) => Quiet(key, QuietReason.RuleOff, plan, self),
+            (AlertChangeReason.LimitsChanged, _) => Quiet(key, QuietReason.LimitsChanged, plan, self),
+            (AlertChangeReason.SuppressedByPlan, _) => Quiet(key, QuietReason.SuppressedByPlan, plan, self),
             _ when news.Corrected => $"{Named(key, self)}: corrected by a later file",
-            { } reason => Quiet(key, reason, plan, self),
-            null => RuleBook.Of(key.Rule)?.Record.Returned(key, limits, self) ?? $"{Words(key.Rule)}: back to usual",
+            (_, { } reason) => Quiet(key, reason, plan, self),
+            _ => RuleBook.Of(key.Rule)?.Record.Returned(key, limits, self) ?? $"{Words(key.Rule)}: back to usual",
         };
     }
 

@@ -82,6 +82,7 @@ public static class CommandLine
         InspectCommand.Create(),
         LayoutCommand.Create(),
         ExportCommand.Create(),
+        ReplayCommand.Create(),
         RebuildCommand.Create(),
         VerifyCommand.Create(),
         StatusCommand.Create(),

@@ -10,6 +10,7 @@ using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Stimulus;
 using NodaTime;
+using NodaTime.Text;
 
 namespace LoadWatch.Service.Configuration;
 
@@ -42,6 +43,7 @@ public sealed class ConfigurationReader
         {
             UsableShareWanted = file.Computation.UsableShareWanted,
             Quality = file.Computation.Quality,
+            Equations = file.Computation.Equations,
             HeartRateReserveBounds = Ascending(file.Computation.HeartRateReserveBounds, "$.computation.heart_rate_reserve_bounds"),
             PowerBounds = Ascending(file.Computation.PowerBounds, "$.computation.power_bounds"),
             SpeedBounds = Ascending(file.Computation.SpeedBounds, "$.computation.speed_bounds"),
@@ -55,7 +57,10 @@ public sealed class ConfigurationReader
         faults.Stop();
 
         var roster = faults.Collect(() => RosterReader.Read(Resolve(file.Roster), file.Roster, groups.Keys.ToList(), zone));
-        var people = (roster ?? []).ToDictionary(person => person.Id, StringComparer.OrdinalIgnoreCase);
+        var people = (roster ?? []).ToDictionary(
+            person => person.Id,
+            person => groups.TryGetValue(person.Group, out var group) ? person with { DayBeginsAt = group.DayBeginsAt } : person,
+            StringComparer.OrdinalIgnoreCase);
         var anchors = faults.Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList()));
         var devices = faults.Collect(() => roster is null || !HasDevices(file) ? DeviceBook.Empty : DevicesReader.Read(Resolve(file.Devices), file.Devices, people));
         var limits = LimitsOfPeople(json, file, people, roster is not null);
@@ -75,7 +80,7 @@ public sealed class ConfigurationReader
             people,
             groups,
             contacts,
-            new AnchorBook(anchors!),
+            new AnchorBook(anchors!) { HeartRateMaxEquation = computation.Equations.HeartRateMaxByAge },
             inboxes,
             [.. file.Layouts, .. BuiltInLayouts.All],
             computation,
@@ -142,6 +147,7 @@ public sealed class ConfigurationReader
             var group = new Group(entry.Id, entry.Name.Length > 0 ? entry.Name : entry.Id, entry.LoadQuantity, limits[i])
             {
                 LoadFallbacks = entry.LoadFallbacks,
+                DayBeginsAt = LocalTimePattern.CreateWithInvariantCulture("HH:mm").Parse(entry.DayBeginsAt).Value,
             };
             if (!groups.TryAdd(entry.Id, group))
             {

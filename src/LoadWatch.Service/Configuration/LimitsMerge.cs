@@ -43,17 +43,17 @@ public static class LimitsMerge
     }
 
     /// <summary>What a clinic's visits are not about.</summary>
-    private static JsonObject OfKind(JsonElement group) =>
+    internal static JsonObject OfKind(JsonElement group) =>
         group.TryGetProperty("kind", out var kind) && Enum.Parse<GroupKind>(kind.GetString()!, ignoreCase: true) == GroupKind.Clinic
             ? new JsonObject { ["monotony"] = new JsonObject { ["enabled"] = false }, ["hard_days"] = new JsonObject { ["enabled"] = false } }
             : [];
 
     private static RuleLimits Read(JsonObject limits) => limits.Deserialize<RuleLimits>(ConfigurationJson.Options)!;
 
-    private static JsonObject Limits(JsonElement owner) =>
+    internal static JsonObject Limits(JsonElement owner) =>
         owner.TryGetProperty("limits", out var limits) && limits.ValueKind == JsonValueKind.Object ? JsonObject.Create(limits)! : [];
 
-    private static JsonObject Merge(JsonObject under, JsonObject over)
+    internal static JsonObject Merge(JsonObject under, JsonObject over)
     {
         foreach (var (key, value) in over)
         {

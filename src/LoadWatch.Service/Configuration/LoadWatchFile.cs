@@ -1,5 +1,6 @@
 using System.ComponentModel.DataAnnotations;
 using System.Text.Json.Serialization;
+using LoadWatch.Activities;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
 using LoadWatch.People;
@@ -128,6 +129,10 @@ public sealed record GroupEntry
     /// </summary>
     public IReadOnlyList<string> LoadFallbacks { get; init; } = [];
 
+    /// <summary>Local time at which a day begins, 00:00 to 12:00: sessions that begin before it count for the date before.</summary>
+    [RegularExpression("^(0[0-9]|1[01]):[0-5][0-9]$|^12:00$", ErrorMessage = "is not a time from 00:00 to 12:00")]
+    public string DayBeginsAt { get; init; } = "00:00";
+
     /// <summary>Limits that differ from the common ones; only the keys that differ.</summary>
     public RuleLimits? Limits { get; init; }
 }
@@ -220,6 +225,9 @@ public sealed record ComputationEntry
 
     /// <summary>From when on a heart rate is no reading of the person.</summary>
     public QualityLimits Quality { get; init; } = new();
+
+    /// <summary>Which published equations are used, and their constants from memory.</summary>
+    public EquationChoices Equations { get; init; } = new();
 
     /// <summary>Inner bounds of the heart-rate zones, fractions of heart-rate reserve, where thresholds are not anchored.</summary>
     public IReadOnlyList<double> HeartRateReserveBounds { get; init; } = [0.30, 0.40, 0.60, 0.90];

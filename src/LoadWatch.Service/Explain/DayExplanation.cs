@@ -43,6 +43,8 @@ public static class DayExplanation
         }
 
         AppendTrends(text, day, configuration.GroupOf(known).LoadQuantity);
+        DayTrendText.Append(text, day, session.Days.Before(known.Id, day.Date.PlusDays(1), day.Date));
+        RoomText.Append(text, new TodaysLimits(configuration, TableBasis.Of(configuration, session)), session, known, date is null ? [day.Date, day.Date.PlusDays(1)] : [day.Date]);
         ReferenceExplanation.Append(text, known, configuration.GroupOf(known), TableBasis.Of(configuration, session).AnchorsOf(known), day.Date);
         var recorded = session.Activities.OfPerson(known.Id, day.Date, day.Date).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
         foreach (var activity in PersonTraining.Of(session, configuration, TableBasis.Of(configuration, session), known, day.Date, day.Date).Activities)
@@ -96,11 +98,6 @@ public static class DayExplanation
         Line(text, "strain = week x monotony (Foster 1998)", day.Strain);
         Line(text, "share of 7 days with known load", day.Coverage7);
         Line(text, "share of 28 days with known load", day.Coverage28);
-        foreach (var (region, state) in day.Regions.OrderBy(pair => pair.Key))
-        {
-            var heavy = state.HeavyOrFast switch { true => "yes", false => "no", null => "unknown" };
-            text.AppendLine(CultureInfo.InvariantCulture, $"    {BodyRegions.Word(region)}: heavy or fast {heavy}, days since {Number(state.DaysSince)}, in 28 days {Number(state.Days28)}, usual gap in days {Number(state.UsualGapDays)}");
-        }
     }
 
     private static void AppendActivity(StringBuilder text, StoreSession session, JoinedActivity activity, StoredActivity? recorded)

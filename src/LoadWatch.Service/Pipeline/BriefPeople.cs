@@ -54,6 +54,7 @@ public sealed class BriefPeople(WorkingConfiguration configuration, Instant now,
             {
                 Notes = Notes(person, through, [.. findings.Where(IsNote)]),
                 Suppressed = [.. findings.Where(finding => finding.Severity == Severity.Suppressed)],
+                Room = session.Rooms.Of(person.Id) is { } room && room.Date == through.PlusDays(1) ? room : null,
             };
             recent[person.Id] = subject = WithBreak(subject);
         }
@@ -109,7 +110,7 @@ public sealed class BriefPeople(WorkingConfiguration configuration, Instant now,
     private List<AlertNews> Alerts(Person person, AlertsSince? news) =>
     [
         .. Open(person.Id).Where(alert => alert.State is AlertState.Unacknowledged or AlertState.Acknowledged).Select(alert => new AlertNews(alert, news is null || news.IsNew(alert.Id), false, false)),
-        .. news?.Over(person.Id) ?? [],
+        .. news?.OverOf(person.Id) ?? [],
     ];
 
     private AlertsSince Since(long position)

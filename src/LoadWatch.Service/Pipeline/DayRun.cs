@@ -1,6 +1,7 @@
 using LoadWatch.Activities;
 using LoadWatch.Days;
 using LoadWatch.Findings;
+using LoadWatch.Limits;
 using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Plans;
@@ -55,18 +56,21 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
         (replacedTo, next) = (to, to.PlusDays(1));
         var wanted = Wanted(to.PlusDays(1));
         before = [.. before.Concat(series.Days).Where(day => day.Date >= wanted)];
-        return stretch;
+        return IsDone && series.Days.Count > 0 ? stretch with { Room = Room(session, to.PlusDays(1)) } : stretch;
     }
 
     private IReadOnlyList<Day> Begin(StoreSession session)
     {
         var days = session.Days.Before(person.Id, from, Wanted(from));
-        next = days.Count > 0 ? from : Earlier(session.Activities.FirstOfPerson(person.Id), session.TableRows.FirstOfPerson(person.Id));
+        next = days.Count > 0 ? from : Earlier(session.Activities.FirstOfPerson(person.Id), session.TableRows.FirstOfPerson(person.Id)?.PlusDays(person.DayBeginsAt == LocalTime.Midnight ? 0 : -1));
         return days;
     }
 
     /// <summary>The first of the days that are looked back at from a date.</summary>
-    private LocalDate Wanted(LocalDate date) => periods.Value.Reach(date) ?? date.PlusDays(-LoadCalendar.LookBackDays);
+    private LocalDate Wanted(LocalDate date) => TodaysLimits.First(periods.Value, date);
+
+    private TodaysRoom Room(StoreSession session, LocalDate date) =>
+        TodaysLimits.Behind(person, configuration.GroupOf(person), before!, plans.Of(session, person, date, date), Changes(session, date, date));
 
     private static LocalDate? Earlier(LocalDate? one, LocalDate? other) => one is { } a && other is { } b ? LocalDate.Min(a, b) : one ?? other;
 
@@ -101,6 +105,9 @@ public sealed record DayStretch(string Person, LocalDate From, LocalDate? To, Pe
 
     public required long Marks { get; init; }
 
+    /// <summary>What the limits leave open on the date behind the run; null where no day was computed.</summary>
+    public TodaysRoom? Room { get; init; }
+
     /// <summary>Questions to be asked before it are forgotten.</summary>
     public required LocalDate OldestQuestion { get; init; }
 
@@ -112,6 +119,16 @@ public sealed record DayStretch(string Person, LocalDate From, LocalDate? To, Pe
         if (To is null)
         {
             session.People.Computed(Person, Through, Marks);
+            WriteRoom(session);
+        }
+    }
+
+    /// <summary>What is dirty behind the last date alone leaves it.</summary>
+    private void WriteRoom(StoreSession session)
+    {
+        if (From <= Through)
+        {
+            session.Rooms.Replace(Person, Room);
         }
     }
 }

@@ -17,6 +17,7 @@ public sealed class DerivedRows
         "DELETE FROM finding WHERE person = @person",
         "DELETE FROM day WHERE person = @person",
         "DELETE FROM question WHERE person = @person",
+        "DELETE FROM todays_room WHERE person = @person",
         "DELETE FROM person_state WHERE person = @person",
     ];
 
@@ -24,6 +25,7 @@ public sealed class DerivedRows
     [
         "DELETE FROM finding",
         "DELETE FROM day",
+        "DELETE FROM todays_room",
         "DELETE FROM person_state",
         "DELETE FROM histogram",
         "DELETE FROM activity",

@@ -59,7 +59,7 @@ public class NotUsableRuleTests
             UsableShare = new Dictionary<Channel, double> { [session.Channel] = session.Share },
         });
         var days = Enumerable.Range(0, 20).Select(day => new Day { Person = "anna", Date = On(day), State = DayState.Recorded }).ToList();
-        var person = from < 0 ? Anna : Anna with { HeartRateInvalidFrom = On(from) };
+        var person = from < 0 ? Anna : Anna with { HeartRateInvalid = LoadWatch.People.DatePeriods.Since(On(from)) };
         return new NotUsableRule().Evaluate(new RuleSubject(person, days, new RuleLimits()) { Activities = [.. activities, .. more] }).ToList();
     }
 }

@@ -4,6 +4,7 @@ using System.Text;
 using System.Text.Json;
 using System.Text.Json.Serialization;
 using System.Text.RegularExpressions;
+using LoadWatch.Activities;
 using LoadWatch.Decoding;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
@@ -29,7 +30,7 @@ public sealed class ReadmeTests
     {
         get
         {
-            var data = new TheoryData<string, Type> { { "## Intake", typeof(IntakeEntry) }, { "**`quality`**", typeof(QualityLimits) } };
+            var data = new TheoryData<string, Type> { { "## Intake", typeof(IntakeEntry) }, { "**`quality`**", typeof(QualityLimits) }, { "**`equations`**", typeof(EquationChoices) } };
             foreach (var rule in typeof(RuleLimits).GetProperties().Where(property => property.Name != nameof(RuleLimits.Quantities)))
             {
                 data.Add($"**`{KeyOf(rule)}`**", rule.PropertyType);
@@ -52,6 +53,14 @@ public sealed class ReadmeTests
             if (property.GetCustomAttribute<RangeAttribute>() is { } range)
             {
                 Assert.Contains(cells, cell => Regex.IsMatch(cell, $@"^{Invariant(range.Minimum)} to {Invariant(range.Maximum)}($|[,;])"));
+            }
+            else if (property.GetCustomAttribute<NumbersAttribute>() is { } numbers)
+            {
+                Assert.Equal($"{Invariant(numbers.Lowest)} to {Invariant(numbers.Highest)} each{(numbers.IsRising ? ", rising" : "")}", cells[2]);
+            }
+            else if (property.PropertyType.IsEnum)
+            {
+                Assert.All(ValueCheck.WordsOf(property.PropertyType), word => Assert.Contains($"`{word}`", cells[3], StringComparison.Ordinal));
             }
             else
             {
@@ -86,7 +95,7 @@ public sealed class ReadmeTests
     {
         Type[] types =
         [
-            typeof(InboxEntry), typeof(GroupEntry), typeof(PersonEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(QualityLimits), typeof(CsvLayout), typeof(CsvQuality), typeof(CsvField),
+            typeof(InboxEntry), typeof(GroupEntry), typeof(PersonEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(QualityLimits), typeof(EquationChoices), typeof(CsvLayout), typeof(CsvQuality), typeof(CsvField),
             typeof(CsvWideEntry),
         ];
         var missing = types

@@ -23,11 +23,11 @@ public sealed class BasisPartsTests
 
     [Fact]
     public void EveryPropertyOfAPersonIsInAPart() =>
-        Assert.Equal(Sorted(["Id", "Name", "Group", "BirthYear", "Sex", "Zone", "HeartRateInvalidFrom", "Aliases"]), Properties(typeof(Person)));
+        Assert.Equal(Sorted(["Id", "Name", "Group", "BirthYear", "Sex", "Zone", "DayBeginsAt", "HeartRateInvalid", "Aliases"]), Properties(typeof(Person)));
 
     [Fact]
     public void EveryPropertyOfAGroupIsInAPart() =>
-        Assert.Equal(Sorted(["Id", "Name", "LoadQuantity", "Limits", "LoadFallbacks"]), Properties(typeof(Group)));
+        Assert.Equal(Sorted(["Id", "Name", "LoadQuantity", "Limits", "LoadFallbacks", "DayBeginsAt"]), Properties(typeof(Group)));
 
     [Fact]
     public void EveryPropertyOfAnAnchorIsInItsLine() =>
