@@ -37,7 +37,7 @@ public sealed class StimulusLowRule : IRule
         {
             var day = subject.Days[index];
             run.Watch(PlanMutes.Of(Name, day.Plan), day.Date);
-            if (index - first >= limits.HistoryDays && !(run.Since is null && TheGapTellsIt(subject, day, region, series[index])) && Read(subject, series, first, index) is { } count)
+            if (index - first >= limits.HistoryDays && !(run.Since is null && TheGapTellsIt(subject, day, region, series[index])) && Read(subject, tally, index) is { } count)
             {
                 run.Read(day.Date, count, count.Heavy < count.Limit, count.Heavy < count.Return);
             }

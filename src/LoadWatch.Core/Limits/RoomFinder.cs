@@ -41,7 +41,7 @@ public static class RoomFinder
             Regions = [.. Weeks(before[^1])],
         };
         var said = plan.On(date);
-        if (said.IsAwayOrReturning())
+        if (PlanMutes.Holds(PlannedState.Absent, said) || PlanMutes.Holds(PlannedState.Returning, said))
         {
             return bare with { Reason = said.Absence is null ? NoRoom.Returning : NoRoom.Absent };
         }

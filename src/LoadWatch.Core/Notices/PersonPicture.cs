@@ -12,7 +12,7 @@ public sealed record PersonPicture(IReadOnlyList<BriefDay> Days, IReadOnlyList<d
     public const int DayCount = 56;
 
     /// <summary>Which days they are, and in what the load is counted.</summary>
-    public string Caption => $"{BriefNumbers.Day(First)} to {BriefNumbers.Day(Last)}, load in {Unit}";
+    public string Caption => $"{BriefNumbers.Day(First)} to {BriefNumbers.Day(Last)}, {Unit} a day{(Usual is null ? "" : "; grey: usual weeks")}";
 
     /// <summary>What the picture says, for who reads text or hears the page.</summary>
     public string Words => PictureWords.Of(this);

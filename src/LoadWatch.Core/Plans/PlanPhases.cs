@@ -1,3 +1,4 @@
+using LoadWatch.Findings;
 
 namespace LoadWatch.Plans;
 

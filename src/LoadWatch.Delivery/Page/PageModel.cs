@@ -8,6 +8,8 @@ internal sealed record PageModel(
     string Date,
     string? DataUpTo,
     string Contact,
+    string Past,
+    string FirstLine,
     string Headline,
     string? Lead,
     IReadOnlyList<PagePerson> Flagged,
@@ -27,18 +29,16 @@ internal sealed record PageModel(
 
     public static PageModel Of(Brief brief)
     {
-        var rows = brief.Groups
-            .SelectMany(group => group.Rows.Select(row => (Group: group, Row: row)))
-            .DistinctBy(pair => pair.Row.PersonId, StringComparer.Ordinal)
-            .ToDictionary(pair => pair.Row.PersonId, StringComparer.Ordinal);
         var (headline, lead) = Split(OneLine.Of(brief.FirstLine));
         return new PageModel(
             BriefText.DateInWords(brief.Date),
             brief.DataUpTo is { } upTo ? BriefText.DateInWords(upTo) : null,
             OneLine.Of(brief.ContactName),
+            PageFile.PastName(Uri.EscapeDataString(brief.ContactId)),
+            OneLine.Of(brief.FirstLine),
             headline,
             lead,
-            [.. brief.Flagged.Select(person => PagePerson.Of(person, StripOf(person.PersonId)))],
+            [.. brief.Flagged.Select(PagePerson.Of)],
             brief.FlaggedBeyond > 0 ? BriefText.Beyond(brief.FlaggedBeyond) : null,
             [.. brief.Returned.Select(Clean)],
             [.. brief.Changed.Select(Clean)],
@@ -51,8 +51,6 @@ internal sealed record PageModel(
             Calls = PageCalls.Of(brief.Calls),
             Week = PageWeek.Of(brief.Week),
         };
-
-        Strip? StripOf(string person) => rows.TryGetValue(person, out var at) ? Strip.Of(at.Row, at.Group.LoadUnit) : null;
     }
 
     /// <summary>The first sentence stands large, the others below it.</summary>
@@ -67,16 +65,16 @@ internal sealed record PageModel(
 
 /// <summary>One person to act on: the parts of one sentence.</summary>
 /// <param name="Since"><c>new</c>, or since when; may be empty.</param>
-internal sealed record PagePerson(string Name, string Severity, string Since, string What, string Consider, string Decides, Strip? Strip)
+internal sealed record PagePerson(string Name, string Severity, string Since, string What, string Consider, string Decides, PagePicture? Picture)
 {
-    public static PagePerson Of(FlaggedPerson person, Strip? strip) => new(
+    public static PagePerson Of(FlaggedPerson person) => new(
         OneLine.Of(person.Name),
         BriefText.SeverityWord(person.Severity),
         person.Since,
         OneLine.Of(person.What),
         OneLine.Of(person.Consider),
         OneLine.Of(person.Decides),
-        strip);
+        person.Picture is { } picture ? new PagePicture(picture) : null);
 }
 
 internal sealed record PageGroup(string Name, string Unit, string People, IReadOnlyList<PageRow> Rows)

@@ -67,6 +67,7 @@ public sealed class ConfigurationReader
         var contacts = ContactsReader.Read(file, groups, roster is null ? null : people, zone, faults);
         var administrators = AdministratorsReader.Read(file, zone, faults);
         var mail = new MailReader(Resolve, faults.Add).Read(file);
+        var webhook = new WebhookReader(Resolve, faults.Add).Read(file);
         faults.Stop();
 
         var (hash, text) = Version(json, file);
@@ -91,6 +92,7 @@ public sealed class ConfigurationReader
             AllowNetworkDataFolder = file.AllowNetworkDataFolder,
             Administrators = administrators,
             Mail = mail,
+            Webhook = webhook,
             Devices = devices!,
             CommonLimits = file.Limits,
             LimitsOfPeople = limits,

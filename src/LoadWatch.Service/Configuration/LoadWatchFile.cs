@@ -60,6 +60,9 @@ public sealed record LoadWatchFile
     /// <summary>The server that takes mail.</summary>
     public MailEntry Mail { get; init; } = new();
 
+    /// <summary>How notices are posted to chat or ticket systems.</summary>
+    public WebhookEntry Webhook { get; init; } = new();
+
     /// <summary>CSV layouts beside the built-in ones; the header picks the layout.</summary>
     public IReadOnlyList<CsvLayout> Layouts { get; init; } = [];
 
@@ -193,7 +196,10 @@ public sealed record ContactEntry
     /// <summary>Address for mail; blank for none.</summary>
     public string Mail { get; init; } = "";
 
-    /// <summary>How mail names the people: <c>full</c>, <c>initials</c>, or <c>none</c> (counts only). Page and notice file name them in full.</summary>
+    /// <summary>Address of a chat or ticket system that notices are posted to, https; blank for none.</summary>
+    public string Webhook { get; init; } = "";
+
+    /// <summary>How mail and webhook name the people: <c>full</c>, <c>initials</c>, or <c>none</c> (counts only). Page and notice file name them in full.</summary>
     public NamesShown Names { get; init; } = NamesShown.Full;
 }
 

@@ -1,6 +1,7 @@
 using LoadWatch.Activities;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Delivery.Mail;
+using LoadWatch.Delivery.Webhook;
 using LoadWatch.Findings;
 using LoadWatch.People;
 using LoadWatch.Service.Arrivals;
@@ -34,6 +35,9 @@ public sealed record WorkingConfiguration(
 {
     /// <summary>The mail server; null when there is none.</summary>
     public MailSettings? Mail { get; init; }
+
+    /// <summary>Where notices are posted to; null when nowhere.</summary>
+    public WebhookSettings? Webhook { get; init; }
 
     /// <summary>Whether the data folder may lie on a network file system.</summary>
     public bool AllowNetworkDataFolder { get; init; }

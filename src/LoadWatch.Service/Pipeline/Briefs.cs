@@ -1,6 +1,8 @@
 using LoadWatch.Alerts;
 using LoadWatch.Days;
+using LoadWatch.Delivery.Mail;
 using LoadWatch.Delivery.Page;
+using LoadWatch.Delivery.Webhook;
 using LoadWatch.Findings;
 using LoadWatch.Notices;
 using LoadWatch.People;
@@ -43,11 +45,11 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         return Freeze(session, notice with { Flagged = flagged }, Ways(contact));
     }
 
-    /// <summary>Only mail is told twice, to whoever is told who is to be looked at: the page is rewritten anyway.</summary>
+    /// <summary>Only what leaves the machine is told twice, to whoever is told who is to be looked at: the page is rewritten anyway.</summary>
     private bool DecideUpdate(StoreSession session, BriefPeople people, Contact contact)
     {
         var date = now.InZone(contact.Zone).Date;
-        var ways = Ways(contact).Where(way => way.Channel == Mail).ToList();
+        var ways = Ways(contact).Where(way => way.Channel is Mail or WebhookChannel.ChannelName).ToList();
         if (ways.Count == 0 || !contact.Forms.Contains(BriefForm.Daily) || session.Notices.Get(NoticePolicy.BriefKey(contact, date))?.Flagged is not { } told)
         {
             return false;
@@ -68,13 +70,12 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     private Notice Write(Contact contact, Brief brief, string key, string subject, NoticeReason reason)
     {
         var notice = new Notice(key, contact.Id, brief.Date, subject, BriefText.Write(brief), PageRenderer.Render(brief), reason);
-        if (contact.Names == NamesShown.Full)
-        {
-            return notice;
-        }
-
         var mailed = MailNames.Of(brief, contact.Names, configuration.People.Values);
-        return notice with { MailText = BriefText.Write(mailed), MailHtml = PageRenderer.Render(mailed) };
+        return notice with
+        {
+            MailText = contact.Names == NamesShown.Full ? null : BriefText.Write(mailed),
+            MailHtml = IsMailed(contact) ? MailRenderer.Render(mailed) : null,
+        };
     }
 
     private bool Freeze(StoreSession session, Notice notice, IReadOnlyList<Storage.Notices.Delivery> ways) =>
@@ -84,13 +85,20 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     private List<Storage.Notices.Delivery> Ways(Contact contact)
     {
         List<Storage.Notices.Delivery> ways = [new("page", contact.Id), new("log", contact.Id)];
-        if (configuration.Mail is not null && contact.Mail is { } address)
+        if (IsMailed(contact))
         {
-            ways.Add(new Storage.Notices.Delivery(Mail, address));
+            ways.Add(new Storage.Notices.Delivery(Mail, contact.Mail!));
+        }
+
+        if (configuration.Webhook?.Addresses.ContainsKey(contact.Id) == true)
+        {
+            ways.Add(new Storage.Notices.Delivery(WebhookChannel.ChannelName, contact.Id));
         }
 
         return ways;
     }
+
+    private bool IsMailed(Contact contact) => configuration.Mail is not null && contact.Mail is not null;
 
     /// <summary>Of what the contact may be told: an alert that is not for them changes no list of theirs.</summary>
     private string Flagged(BriefPeople people, Contact contact)

@@ -118,13 +118,14 @@ public sealed class RoomFinderTests
 
     /// <summary>
     /// Read by the rules on a whole series with one more session: at the figure none raises, a little above it the named one does, and else the largest day is the bound.
+    /// Hard days have neither deadband nor off-delay here, as a row that stands would be found at loads that do not raise it.
     /// </summary>
     [Fact]
     public void AtTheFigureNoRuleRaisesAndALittleAboveTheNamedOneDoes() =>
         Gen.Select(Gen.Int[0, 8].Array[75, 160], Gen.Int[0, 3], Gen.Bool).Sample((steps, kind, strict) =>
         {
             var loads = steps.Select((step, day) => (double?)(kind switch { 0 => step * 20, 1 => 80 + step, 2 => (day % 7 < 3 ? 60 : 110) + (step * 3), _ => step < 2 ? 0 : 70 + (step * step) })).ToArray();
-            var limits = strict ? Strict : new RuleLimits();
+            var limits = strict ? Strict : new RuleLimits { HardDays = new() { ReturnFactor = new HardDaysLimits().MedianFactor, OffDays = 1 } };
             var days = Days(loads, limits: limits);
             var room = RoomFinder.Of(Anna, Squad(limits), days, PersonPlan.None);
             if (room.Load is not { } load)
@@ -147,7 +148,7 @@ public sealed class RoomFinderTests
         WeeklyJump = new() { Raise = 0.1, Return = 0.05, UsualFactor = 1 },
         SessionSpike = new() { LoadNotice = 0.05, LoadWarning = 0.3 },
         Monotony = new() { Raise = 1.3, Return = 1.2, StrainQuantile = 0.5, StrainsWanted = 28 },
-        HardDays = new() { MedianFactor = 1, Days = 2 },
+        HardDays = new() { MedianFactor = 1, ReturnFactor = 1, OffDays = 1, Days = 2 },
     };
 
     /// <summary>Rules of rising load that find something on the date behind some days; nothing stands from before but a row of hard days.</summary>

@@ -17,7 +17,7 @@ public sealed class PersonPictureTests
         Assert.Equal(56, picture.Days.Count);
         Assert.Equal((new LocalDate(2026, 1, 4), Yesterday), (picture.First, picture.Last));
         Assert.Equal(Enumerable.Range(0, 56).Select(picture.First.PlusDays), picture.Days.Select(day => day.Date));
-        Assert.Equal("4 Jan to 28 Feb, load in AU", picture.Caption);
+        Assert.Equal("4 Jan to 28 Feb, AU a day; grey: usual weeks", picture.Caption);
     }
 
     [Fact]
