@@ -18,7 +18,7 @@ public static class Limits
             LoadRatio = limits.LoadRatio with { Raise = 2.2, Return = 1.8, OnDays = 2 },
             WeeklyJump = limits.WeeklyJump with { Raise = 0.3, Return = 0.15, UsualFactor = 1.5 },
             SessionSpike = limits.SessionSpike with { LoadNotice = 0.6, RunNotice = 0.3, RunWarning = 0.6, SessionsWanted = 5 },
-            FallingLoad = limits.FallingLoad with { Notice = 0.5, OnDays = 5 },
+            FallingLoad = limits.FallingLoad with { Notice = 0.55, OnDays = 3 },
             StimulusLow = limits.StimulusLow with { UsualShare = 0.35, OlderFloorDays = 2 },
             Silence = limits.Silence with { PlannedMissed = 3, ExtraDays = 3 },
             NotUsable = limits.NotUsable with { Sessions = 3 },

@@ -27,8 +27,7 @@ public sealed class Report(int seed, int people, int days, TextWriter output)
                 $"{people} {habits.Name}",
                 set,
                 Number(Score.FalsePerPersonAnd100Days(season)),
-                string.Join(", ", Score.FalseAlerts(season).GroupBy(raise => raise.Key.Rule, StringComparer.Ordinal).OrderByDescending(rule => rule.Count())
-                    .Select(rule => $"{rule.Key} {Number(100.0 * rule.Count() / people / days)}")),
+                OfThem(season),
                 Count(Score.Chatter(season)),
                 Number(rows.Average()),
                 Count(rows[(int)(0.95 * (rows.Count - 1))]));
@@ -72,8 +71,8 @@ public sealed class Report(int seed, int people, int days, TextWriter output)
     public void Disturbances()
     {
         var habits = Habits.Squad;
-        Row("squad", "limits", "false alerts a person and 100 days", "chatter");
-        Row("---", "---", "---", "---");
+        Row("squad", "limits", "false alerts a person and 100 days", "of them", "chatter");
+        Row("---", "---", "---", "---", "---");
         foreach (var (name, noise) in new (string, Noise)[]
         {
             ("as above", new Noise()),
@@ -87,7 +86,9 @@ public sealed class Report(int seed, int people, int days, TextWriter output)
             Disturbed(name, "fitted", Limits.Fitted(habits), noise);
         }
 
-        Disturbed("as above", "without deadband and delays", Limits.WithoutDeadband(Limits.Fitted(habits)), new Noise());
+        Disturbed("as above", "fitted, without deadband and delays", Limits.WithoutDeadband(Limits.Fitted(habits)), new Noise());
+        Disturbed("as above", "built in", Limits.BuiltIn(habits), new Noise());
+        Disturbed("as above", "built in, without deadband and delays", Limits.WithoutDeadband(Limits.BuiltIn(habits)), new Noise());
     }
 
     public void Clinic(int members)
@@ -102,8 +103,14 @@ public sealed class Report(int seed, int people, int days, TextWriter output)
     private void Disturbed(string name, string set, RuleLimits limits, Noise noise)
     {
         var season = Season.Of(new WorldMaker(seed, Habits.Squad, noise, limits).Healthy(people, days), Habits.Squad.Sport);
-        Row(name, set, Number(Score.FalsePerPersonAnd100Days(season)), Count(Score.Chatter(season)));
+        Row(name, set, Number(Score.FalsePerPersonAnd100Days(season)), OfThem(season), Count(Score.Chatter(season)));
     }
+
+    private string OfThem(SeasonResult season) => string.Join(", ", Score.FalseAlerts(season)
+        .GroupBy(raise => raise.Key.Rule, StringComparer.Ordinal)
+        .OrderByDescending(rule => rule.Count())
+        .ThenBy(rule => rule.Key, StringComparer.Ordinal)
+        .Select(rule => $"{rule.Key} {Number(100.0 * rule.Count() / people / days)}"));
 
     private static IEnumerable<(Habits Habits, string Set, RuleLimits Limits)> Combinations() =>
         Groups.SelectMany(habits => Sets.Select(set => (habits, set.Name, set.Of(habits))));
