@@ -34,7 +34,12 @@ internal sealed class LiquidTemplate(string name)
         options.MemberAccessStrategy.Register<PageModel>();
         options.MemberAccessStrategy.Register<PagePerson>();
         options.MemberAccessStrategy.Register<PagePicture>();
-        options.MemberAccessStrategy.Register<PageReason>();
+        options.MemberAccessStrategy.Register<PageSheet>();
+        options.MemberAccessStrategy.Register<PageSheetRow>();
+        options.MemberAccessStrategy.Register<PageCalls>();
+        options.MemberAccessStrategy.Register<PageCall>();
+        options.MemberAccessStrategy.Register<PageWeek>();
+        options.MemberAccessStrategy.Register<WeekOfGroup>();
         options.MemberAccessStrategy.Register<PageGroup>();
         options.MemberAccessStrategy.Register<PageRow>();
         options.MemberAccessStrategy.Register<Strip>();

@@ -1,5 +1,6 @@
 using BenchmarkDotNet.Running;
 using LoadWatch.Benchmarks;
+using LoadWatch.Benchmarks.Briefs;
 using LoadWatch.Benchmarks.Imports;
 
 // dotnet run -c Release --project tests/Benchmarks -- --filter '*' --job short
@@ -7,6 +8,7 @@ using LoadWatch.Benchmarks.Imports;
 // dotnet run -c Release --project tests/Benchmarks -- worst
 // dotnet run -c Release --project tests/Benchmarks -- compute
 // dotnet run -c Release --project tests/Benchmarks -- decode
+// dotnet run -c Release --project tests/Benchmarks -- brief
 if (args is [ImportBenchmark.Name, .. var rest])
 {
     return ImportBenchmark.Run(rest);
@@ -25,6 +27,11 @@ if (args is [ComputeSpeed.Name])
 if (args is [DecodeTable.Name])
 {
     return DecodeTable.Run();
+}
+
+if (args is [BriefBenchmark.Name])
+{
+    return BriefBenchmark.Run();
 }
 
 BenchmarkSwitcher.FromAssembly(typeof(Program).Assembly).Run(args);

@@ -14,7 +14,6 @@ namespace LoadWatch.Findings;
 /// </summary>
 public sealed class StimulusLowRule : IRule
 {
-
     public string Name => "stimulus_low";
 
     public RuleRecord Record { get; } = new StimulusLowRecord();

@@ -35,7 +35,7 @@ internal static class CommonSilence
     }
 
     private static LocalDate LastRecorded(BriefSubject subject) =>
-        subject.Days.Where(day => day.State == DayState.Recorded).Select(day => day.Date).DefaultIfEmpty(LocalDate.MinIsoValue.PlusDays(1)).Max();
+        PersonNotes.LastRecorded(subject) ?? LocalDate.MinIsoValue.PlusDays(1);
 
     /// <summary>Whether silence is the only reason to look at somebody.</summary>
     public static bool IsOnlySilent(BriefSubject subject) => BriefBuilder.Active(subject).All(news => news.Alert.Key.Rule == Rule);

@@ -3,6 +3,8 @@ namespace LoadWatch.Notices;
 /// <summary>A picture in plain words: everything that can be read from it, day by day left aside.</summary>
 internal static class PictureWords
 {
+    private const int WeekDays = 7;
+
     public static string Of(PersonPicture picture)
     {
         var days = picture.Days;
@@ -11,7 +13,13 @@ internal static class PictureWords
 
     private static string Weeks(PersonPicture picture)
     {
-        var week = picture.WeekLoads[^1] is { } load ? $"{BriefNumbers.Load(load)} {picture.Unit}" : "unknown";
+        var known = picture.Days.TakeLast(WeekDays).Where(day => day.Load is not null).ToList();
+        var week = (picture.WeekLoads[^1], known.Count) switch
+        {
+            ({ } load, WeekDays) => $"{BriefNumbers.Load(load)} {picture.Unit}",
+            (_, 0) => "unknown",
+            _ => $"{BriefNumbers.Load(known.Sum(day => day.Load))} {picture.Unit} so far, {known.Count} of {WeekDays} days known",
+        };
         var usual = picture.Usual is { } weeks ? $"{Range(weeks)} {picture.Unit}, the middle half of {weeks.Count} weeks" : "not known yet";
         return $"The last 7 days: {week}; a usual week: {usual}.";
     }

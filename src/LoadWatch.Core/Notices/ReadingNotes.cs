@@ -7,7 +7,7 @@ public static class ReadingNotes
     [
         new("Load", "the quantity that the group watches, summed over sessions; AU are units of no dimension: minutes "
             + "weighted by heart rate, or by the rating of effort. "
-            + "The week is the last 7 days, scaled up when a day or two of it are unknown."),
+            + "The week is the last 7 days. Where some of them are unknown it stands as it is so far, with a plus, and is not divided by the usual."),
         new("Usual", "the mean week of the 21 days before those 7. \u201CTimes usual\u201D is the week divided by it."),
         new("Heavy-or-fast leg day", "a day with enough hard work of the legs (heavy sets, sprints, efforts well above a steady hard pace) to call on "
             + "the large, fast motor units. Estimated, never measured. \u201CLegs\u201D counts the days since the last one."),

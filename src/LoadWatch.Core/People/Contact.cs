@@ -39,6 +39,9 @@ public sealed record Contact(
     LocalTime BriefAt,
     IReadOnlySet<IsoDayOfWeek> BriefDays)
 {
+    /// <summary>What the brief holds; without <see cref="BriefForm.Daily"/> nobody is told of as somebody to look at.</summary>
+    public IReadOnlyList<BriefForm> Forms { get; init; } = [BriefForm.Daily];
+
     /// <summary>Address for mail, or null for none.</summary>
     public string? Mail { get; init; }
 

@@ -21,6 +21,12 @@ internal sealed record PageModel(
     IReadOnlyList<ReadingNote> Terms,
     IReadOnlyList<string> Cautions)
 {
+    public IReadOnlyList<PageSheet> Sheets { get; init; } = [];
+
+    public PageCalls? Calls { get; init; }
+
+    public PageWeek? Week { get; init; }
+
     public static PageModel Of(Brief brief)
     {
         var (headline, lead) = Split(OneLine.Of(brief.FirstLine));
@@ -39,7 +45,12 @@ internal sealed record PageModel(
             [.. brief.Questions.Select(Clean)],
             [.. brief.Groups.Select(PageGroup.Of)],
             ReadingNotes.Terms,
-            ReadingNotes.Cautions);
+            ReadingNotes.Cautions)
+        {
+            Sheets = [.. brief.Sheets.Select(PageSheet.Of)],
+            Calls = PageCalls.Of(brief.Calls),
+            Week = PageWeek.Of(brief.Week),
+        };
     }
 
     /// <summary>The first sentence stands large, the others below it.</summary>
@@ -49,32 +60,21 @@ internal sealed record PageModel(
         return end < 0 ? (firstLine, null) : (firstLine[..(end + 1)], firstLine[(end + 2)..]);
     }
 
-    private static BriefLine Clean(BriefLine line) => new(OneLine.Of(line.Subject), OneLine.Sentence(line.Sentence));
+    internal static BriefLine Clean(BriefLine line) => new(OneLine.Of(line.Subject), OneLine.Sentence(line.Sentence));
 }
 
-/// <summary>One person to act on.</summary>
-internal sealed record PagePerson(string Name, string Severity, IReadOnlyList<PageReason> Reasons, string Decides, PagePicture? Picture)
+/// <summary>One person to act on: the parts of one sentence.</summary>
+/// <param name="Since"><c>new</c>, or since when; may be empty.</param>
+internal sealed record PagePerson(string Name, string Severity, string Since, string What, string Consider, string Decides, PagePicture? Picture)
 {
     public static PagePerson Of(FlaggedPerson person) => new(
         OneLine.Of(person.Name),
         BriefText.SeverityWord(person.Severity),
-        [.. person.Reasons.Select(PageReason.Of)],
-        OneLine.Of(BriefText.WhoDecides(person)),
+        person.Since,
+        OneLine.Of(person.What),
+        OneLine.Of(person.Consider),
+        OneLine.Of(person.Decides),
         person.Picture is { } picture ? new PagePicture(picture) : null);
-}
-
-/// <param name="Mark"><c>new</c>, <c>seen</c> or null.</param>
-internal sealed record PageReason(string Sentence, string Consider, string? Mark)
-{
-    public static PageReason Of(FlaggedReason reason) => new(
-        OneLine.Of(reason.Sentence),
-        OneLine.Of(reason.Consider),
-        (reason.IsNew, reason.IsSeen) switch
-        {
-            (true, _) => "new",
-            (_, true) => "seen",
-            _ => null,
-        });
 }
 
 internal sealed record PageGroup(string Name, string Unit, string People, IReadOnlyList<PageRow> Rows)
@@ -103,7 +103,7 @@ internal sealed record PageRow(
     public static PageRow Of(BriefRow row, string unit) => new(
         OneLine.Of(row.Name),
         row.Flagged,
-        row.WeekLoad is null ? null : BriefNumbers.Load(row.WeekLoad),
+        row.WeekLoad is null ? null : BriefNumbers.SoFar(row),
         row.UsualWeekLoad is null ? null : BriefNumbers.Load(row.UsualWeekLoad),
         row.Ratio is null ? null : BriefNumbers.Ratio(row.Ratio),
         BriefNumbers.Count(row.KnownDays),

@@ -184,6 +184,12 @@ public sealed record ContactEntry
         IsoDayOfWeek.Friday, IsoDayOfWeek.Saturday, IsoDayOfWeek.Sunday,
     ];
 
+    /// <summary>
+    /// What the brief holds: <c>daily</c> (who is to be looked at, and the groups), <c>weekly</c> (the week; with the first brief of a week), <c>call_list</c>
+    /// (whom to call; with the first brief of a week), <c>class_sheet</c> (who is planned today, to print); empty: as usual for the role and the days.
+    /// </summary>
+    public IReadOnlyList<BriefForm> Forms { get; init; } = [];
+
     /// <summary>IANA zone; blank takes the common one.</summary>
     public string TimeZone { get; init; } = "";
 

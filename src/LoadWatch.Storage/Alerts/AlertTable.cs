@@ -20,6 +20,7 @@ public sealed class AlertTable
         """;
 
     private const string SelectOpen = $"SELECT {Columns} FROM alert WHERE person = @person AND state <> 'normal' ORDER BY id";
+    private const string SelectAllOpen = $"SELECT {Columns} FROM alert WHERE state <> 'normal' ORDER BY id";
     private const string SelectOfPerson = $"SELECT {Columns} FROM alert WHERE person = @person ORDER BY id";
     private const string SelectAll = $"SELECT {Columns} FROM alert ORDER BY id";
     private const string SelectOne = $"SELECT {Columns} FROM alert WHERE id = @id";
@@ -37,6 +38,9 @@ public sealed class AlertTable
 
     /// <summary>A person's alerts that are not normal, sorted by id.</summary>
     public IReadOnlyList<Alert> Open(string person) => Select(SelectOpen, new { person });
+
+    /// <summary>Everybody's alerts that are not normal, sorted by id.</summary>
+    public IReadOnlyList<Alert> Open() => Select(SelectAllOpen);
 
     /// <summary>Every alert, of one person or of all, sorted by id.</summary>
     public IReadOnlyList<Alert> All(string? person = null) => person is null ? Select(SelectAll) : Select(SelectOfPerson, new { person });

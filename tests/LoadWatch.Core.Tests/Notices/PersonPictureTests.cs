@@ -65,7 +65,7 @@ public sealed class PersonPictureTests
         var picture = Of(Trends("a", 30, back => back < 3 ? null : 40, back => back < 5 ? null : false));
 
         Assert.Equal(
-            "56 days to 28 Feb. The last 7 days: unknown; a usual week: not known yet. Load on 27 days, the highest 40 AU on 25 Feb; none on 0; unknown on 29. "
+            "56 days to 28 Feb. The last 7 days: 160 AU so far, 4 of 7 days known; a usual week: not known yet. Load on 27 days, the highest 40 AU on 25 Feb; none on 0; unknown on 29. "
             + "Heavy or fast leg work on 0 days; unknown on 31.",
             picture.Words);
     }

@@ -17,7 +17,7 @@ public sealed class LookTests
         get
         {
             var screens = new TheoryData<string, string, string>();
-            foreach (var page in new[] { "squad", "class", "past", "mail", "faulty" })
+            foreach (var page in new[] { "squad", "class", "past", "mail", "desk", "every", "faulty" })
             {
                 foreach (var size in new[] { "phone", "desk" })
                 {
@@ -104,6 +104,13 @@ public sealed class LookTests
     [InlineData("past", 2)]
     public void ItPrintsOnAFewSheets(string page, int sheets) => Assert.InRange(Seen(page, "paper", null).Sheets, 1, sheets);
 
+    /// <summary>Today's class of 24 with a note for most of them, and ten to call: one sheet of A4 each.</summary>
+    [Theory]
+    [InlineData("sheet", 1)]
+    [InlineData("calls", 1)]
+    [InlineData("desk", 2)]
+    public void ClassAndCallListTakeOneSheetEach(string page, int sheets) => Assert.Equal(sheets, Seen(page, "paper", null).Sheets);
+
     private static Look Seen(string page, string size, string? colours)
     {
         Browser.SkipUnlessThere();
@@ -118,6 +125,10 @@ public sealed class LookTests
         ["squad"] = PageRenderer.Render(MorningExamples.SquadBrief()),
         ["class"] = PageRenderer.Render(MorningExamples.ClassBrief()),
         ["past"] = Past(),
+        ["sheet"] = PageRenderer.Render(MorningExamples.BusyDesk(BriefForm.ClassSheet)),
+        ["calls"] = PageRenderer.Render(MorningExamples.BusyDesk(BriefForm.CallList)),
+        ["desk"] = PageRenderer.Render(MorningExamples.BusyDesk(BriefForm.ClassSheet, BriefForm.CallList)),
+        ["every"] = PageRenderer.Render(MorningExamples.EveryForm()),
         ["mail"] = MailRenderer.Render(MorningExamples.SquadBrief()),
         ["faulty"] = "<!DOCTYPE html><html lang=\"en\"><head><title>Faulty</title></head><body><p style=\"color: #888; background: #999; width: 1300px\">Faint</p><img src=\"data:image/png;base64,iVBORw0KGgo=\"></body></html>",
     };

@@ -22,6 +22,8 @@ public sealed partial class MailRendererTests
     {
         AssertSaysTheSame(SquadBrief());
         AssertSaysTheSame(ClassBrief());
+        AssertSaysTheSame(EveryForm());
+        AssertSaysTheSame(BusyDesk(BriefForm.ClassSheet, BriefForm.CallList));
     }
 
     [Fact]

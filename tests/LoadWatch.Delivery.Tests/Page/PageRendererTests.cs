@@ -1,4 +1,5 @@
 using System.Globalization;
+using System.Net;
 using System.Text.RegularExpressions;
 using LoadWatch.Delivery.Page;
 using LoadWatch.Notices;
@@ -75,6 +76,34 @@ public sealed partial class PageRendererTests
         var page = PageRenderer.Render(SquadBrief());
         Assert.Contains("<h1>4 of 24 to look at: 2 well above their usual, 1 without heavy or fast leg work, 1 silent.</h1>", page, StringComparison.Ordinal);
         Assert.Contains("<p class=\"lead\">1 person without a known day in the last week. 2 questions need an answer.</p>", page, StringComparison.Ordinal);
+    }
+
+    /// <summary>Both show the same sentences: whoever reads the text alone misses nothing but the drawings.</summary>
+    [Fact]
+    public void TextAndPageSayTheSameOfEverybodyToLookAt()
+    {
+        foreach (var brief in new[] { SquadBrief(), ClassBrief(), EveryForm() })
+        {
+            var text = Spaces().Replace(BriefText.Write(brief), " ");
+            var page = Spaces().Replace(WebUtility.HtmlDecode(AnyTag().Replace(PageRenderer.Render(brief), "")), " ");
+            var said = brief.Flagged.Select(person => person.Sentence)
+                .Concat(brief.Returned.Concat(brief.Changed).Concat(brief.Questions).Concat(brief.Week?.Standing ?? []).Concat(brief.Week?.Lost ?? []).Select(line => line.Sentence))
+                .Concat(brief.Week?.Groups.SelectMany(group => group.Sentences) ?? [])
+                .Concat(brief.Calls?.Calls.Select(call => call.Why) ?? [])
+                .Concat(brief.Sheets.SelectMany(sheet => sheet.People).Select(person => person.Note).OfType<string>())
+                .Concat(brief.Sheets.Select(sheet => sheet.Heading))
+                .ToList();
+            Assert.NotEmpty(said);
+            Assert.All(said, sentence => Assert.Contains(sentence, text, StringComparison.Ordinal));
+            Assert.All(said, sentence => Assert.Contains(sentence, page, StringComparison.Ordinal));
+        }
+    }
+
+    [Fact]
+    public void ThePageOfAFrontDeskHoldsSheetAndCallsAlone()
+    {
+        var brief = EveryForm(BriefForm.CallList, BriefForm.ClassSheet);
+        Assert.Equal(["Saturday strength class, class from 10:00 to 11:00", "To call", "Please mind"], Headings().Matches(PageRenderer.Render(brief)).Select(match => match.Groups[1].Value));
     }
 
     [Fact]
@@ -165,6 +194,9 @@ public sealed partial class PageRendererTests
     }
 
     private static IEnumerable<string> Tags(string page) => AnyTag().Matches(AriaLabel().Replace(page, "")).Select(match => match.Value);
+
+    [GeneratedRegex("\\s+")]
+    private static partial Regex Spaces();
 
     [GeneratedRegex("<[^>]*>")]
     private static partial Regex AnyTag();
