@@ -39,6 +39,7 @@ public sealed class StoreSession
         Activities = new ActivityTable(this);
         ObservedAnchors = new ObservedAnchorTable(this);
         Days = new DayTable(this);
+        Rooms = new TodaysRoomTable(this);
         Findings = new FindingTable(this);
         Evaluations = new EvaluationTable(this);
         Alerts = new AlertTable(this);
@@ -70,6 +71,8 @@ public sealed class StoreSession
     public ObservedAnchorTable ObservedAnchors { get; }
 
     public DayTable Days { get; }
+
+    public TodaysRoomTable Rooms { get; }
 
     public FindingTable Findings { get; }
 

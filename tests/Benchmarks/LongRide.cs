@@ -13,6 +13,8 @@ internal static class LongRide
     private const int FileId = 0;
     private const int ActivityFile = 4;
     private const int Record = 20;
+    private const int FieldDescription = 206;
+    private const int Cadence = 4;
     private const long FitEpoch = 631065600;
 
     /// <summary>Time, latitude, longitude, altitude, distance, speed, accumulated power, power, grade, heart rate, cadence, temperature.</summary>
@@ -30,6 +32,19 @@ internal static class LongRide
         (3, FitBaseType.Unsigned8),
         (4, FitBaseType.Unsigned8),
         (13, FitBaseType.Signed8),
+    ];
+
+    /// <summary>Developer, field, base type, name, scale, unit, and the message and field of the profile that it stands for.</summary>
+    private static readonly (byte Number, FitBaseType Type, int Count)[] Description =
+    [
+        (0, FitBaseType.Unsigned8, 1),
+        (1, FitBaseType.Unsigned8, 1),
+        (2, FitBaseType.Unsigned8, 1),
+        (3, FitBaseType.Text, 12),
+        (6, FitBaseType.Unsigned8, 1),
+        (8, FitBaseType.Text, 12),
+        (14, FitBaseType.Unsigned16, 1),
+        (15, FitBaseType.Unsigned8, 1),
     ];
 
     private static readonly Instant Start = Instant.FromUtc(2026, 3, 10, 7, 0);
@@ -55,17 +70,25 @@ internal static class LongRide
     });
 
     /// <summary>The same ride as a device writes it that knows its place and temperature too.</summary>
-    public static byte[] FileOfTwelveFields()
+    public static byte[] FileOfTwelveFields() => TwelveFields([]);
+
+    /// <summary>The same with two developer fields in every record: one that stands for the profile's cadence, one with a scale that is nobody's but its maker's.</summary>
+    public static byte[] FileWithDeveloperFields() => TwelveFields([new(0, FitBaseType.Unsigned8, 0), new(1, FitBaseType.Unsigned16, 0)]);
+
+    private static byte[] TwelveFields(IReadOnlyList<FitDeveloperLayout> developer)
     {
         var writer = new FitPartWriter()
             .Define(0, new(FileId, new FitFieldLayout(0, FitBaseType.Enumeration)))
             .Message(0, ActivityFile)
-            .Define(1, new(Record, [.. Fields.Select(field => new FitFieldLayout(field.Number, field.Type))]));
+            .Define(2, new(FieldDescription, [.. Description.Select(field => new FitFieldLayout(field.Number, field.Type, field.Count))]))
+            .Message(2, 0, 0, 0x02, "turns", 1, "rpm", Record, Cadence)
+            .Message(2, 0, 1, 0x84, "balance", 100, "percent", Record, FitValue.None)
+            .Define(1, new(Record, [.. Fields.Select(field => new FitFieldLayout(field.Number, field.Type))]) { Developer = developer });
         for (var second = 0; second < Seconds; second++)
         {
             var sample = Sample(second);
-            writer.Message(
-                1,
+            FitValue[] values =
+            [
                 Start.ToUnixTimeSeconds() - FitEpoch + second,
                 600_000_000 + (second * 90),
                 100_000_000 + (second * 40),
@@ -77,7 +100,9 @@ internal static class LongRide
                 100 * Math.Sin(second / 900.0),
                 sample.HeartRate,
                 sample.Cadence,
-                17);
+                17,
+            ];
+            writer.Message(1, [.. values, .. developer.Select((_, field) => FitValue.Of(field == 0 ? 88 : 5000 + (second % 100)))]);
         }
 
         return writer.ToBytes();

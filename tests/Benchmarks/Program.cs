@@ -5,6 +5,8 @@ using LoadWatch.Benchmarks.Imports;
 // dotnet run -c Release --project tests/Benchmarks -- --filter '*' --job short
 // dotnet run -c Release --project tests/Benchmarks -- import
 // dotnet run -c Release --project tests/Benchmarks -- worst
+// dotnet run -c Release --project tests/Benchmarks -- compute
+// dotnet run -c Release --project tests/Benchmarks -- decode
 if (args is [ImportBenchmark.Name, .. var rest])
 {
     return ImportBenchmark.Run(rest);
@@ -13,6 +15,16 @@ if (args is [ImportBenchmark.Name, .. var rest])
 if (args is [WorstFiles.Name])
 {
     return WorstFiles.Run();
+}
+
+if (args is [ComputeSpeed.Name])
+{
+    return ComputeSpeed.Run();
+}
+
+if (args is [DecodeTable.Name])
+{
+    return DecodeTable.Run();
 }
 
 BenchmarkSwitcher.FromAssembly(typeof(Program).Assembly).Run(args);

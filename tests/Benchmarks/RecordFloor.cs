@@ -5,12 +5,13 @@ namespace LoadWatch.Benchmarks;
 
 /// <summary>
 /// The least that reading a FIT file of one part takes: its checksum, and a walk that copies up to twelve columns of its records as they stand there,
-/// little-endian and of 1, 2 or 4 bytes. What a decoder does beyond it (scale, missing values, other messages, damage) is measured against this.
+/// little-endian and of 1, 2 or 4 bytes; developer fields are stepped over. What a decoder does beyond it (scale, missing values, other messages, damage) is measured against this.
 /// </summary>
 internal sealed class RecordFloor
 {
     private const int Columns = 12;
     private const int Record = 20;
+    private const int HasDeveloperFields = 0x20;
     private readonly Layout[] layouts = new Layout[16];
     private readonly uint[][] columns;
     private int rows;
@@ -36,8 +37,16 @@ internal sealed class RecordFloor
         for (var field = 0; field < sizes.Length; field++)
             sizes[field] = data[6 + (field * 3) + 1];
 
-        layouts[data[0] & 0xF] = new Layout(BinaryPrimitives.ReadUInt16LittleEndian(data[3..]), sizes, sizes.Sum());
-        return 6 + (sizes.Length * 3);
+        var end = 6 + (sizes.Length * 3);
+        var behind = 0;
+        if ((data[0] & HasDeveloperFields) != 0)
+        {
+            for (var (field, count) = (0, data[end++]); field < count; field++, end += 3)
+                behind += data[end + 1];
+        }
+
+        layouts[data[0] & 0xF] = new Layout(BinaryPrimitives.ReadUInt16LittleEndian(data[3..]), sizes, sizes.Sum() + behind);
+        return end;
     }
 
     private int Copy(ReadOnlySpan<byte> data)

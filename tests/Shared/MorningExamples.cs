@@ -138,6 +138,7 @@ internal static class MorningExamples
             Load = load(back),
             Acute = acute,
             ChronicBefore = before,
+            Coverage7 = Enumerable.Range(back, 7).Count(at => at < count && load(at) is not null) / 7.0,
             RatioUncoupled = before is > 0 ? acute / before : null,
             Regions = new Dictionary<BodyRegion, RegionDay> { [BodyRegion.Legs] = Legs(count, back, heavy) },
         };

@@ -13,7 +13,7 @@ namespace LoadWatch.Activities;
 public static class ActivityComputation
 {
     /// <summary>Raised by one whenever a formula, a cut or a quantity changes: what an older program computed is then computed again.</summary>
-    public const int Version = 6;
+    public const int Version = 7;
 
     private static readonly Channel[] WithBestMeans = [Channel.HeartRate, Channel.Power, Channel.Speed];
 
@@ -27,7 +27,7 @@ public static class ActivityComputation
     public static ActivityValues Compute(UsableRecording cut, Person person, AnchorBook anchors, ComputationSettings settings)
     {
         ArgumentNullException.ThrowIfNull(cut);
-        var date = LocalStart.Of(cut.Recording, person).Date;
+        var date = LocalStart.DateOf(cut.Recording, person);
         var valid = person.HeartRateIsValidOn(date) ? cut : new UsableRecording(WithoutHeartRate(cut.Recording), settings.UsableShareWanted, settings.Quality);
         var usable = UpToMaximum(valid, HeartRateMaximum.On(date, person, anchors), settings.Quality);
         var loads = ActivityLoads.Of(usable, date, person, anchors, settings);

@@ -1,5 +1,6 @@
 using LoadWatch.Activities;
 using LoadWatch.Loads;
+using LoadWatch.People;
 using LoadWatch.Recordings;
 using LoadWatch.Rows;
 using NodaTime;
@@ -10,10 +11,11 @@ namespace LoadWatch.Anchors;
 public static class ShownMaxima
 {
     /// <summary>Of rows of set logs.</summary>
-    /// <param name="zone">The person's.</param>
-    public static IEnumerable<ShownMaximum> Of(IEnumerable<(LocalDate Date, SetRow Row)> rows, DateTimeZone zone) => rows
-        .Select(row => (row.Date, Set: SetRows.Set(row.Row, row.Date, zone)))
-        .Select(row => (row.Date, row.Set.Machine, Exercise: ExerciseWord.Canonical(row.Set.Exercise), Kilograms: OneRepetitionMaxEstimate.KilogramsOf(row.Set)))
+    /// <param name="person">Whose they are.</param>
+    /// <param name="equation">As quantities are estimated by.</param>
+    public static IEnumerable<ShownMaximum> Of(IEnumerable<(LocalDate Date, SetRow Row)> rows, Person person, OneRepetitionMaxEquation equation) => rows
+        .Select(row => (row.Date, Set: SetRows.Set(row.Row, row.Date, person)))
+        .Select(row => (row.Date, row.Set.Machine, Exercise: ExerciseWord.Canonical(row.Set.Exercise), Kilograms: OneRepetitionMaxEstimate.KilogramsOf(row.Set, equation)))
         .Where(row => row.Exercise is not null && row.Kilograms is not null)
         .Select(row => new ShownMaximum(row.Date, row.Exercise!, ExerciseWord.Canonical(row.Machine), row.Kilograms!.Value));
 

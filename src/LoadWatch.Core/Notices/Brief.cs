@@ -39,7 +39,11 @@ public sealed record Brief
 }
 
 /// <summary>One person to act on.</summary>
-public sealed record FlaggedPerson(string PersonId, string Name, Severity Severity, IReadOnlyList<FlaggedReason> Reasons);
+public sealed record FlaggedPerson(string PersonId, string Name, Severity Severity, IReadOnlyList<FlaggedReason> Reasons)
+{
+    /// <summary>The last 56 days; null where no picture is wanted.</summary>
+    public PersonPicture? Picture { get; init; }
+}
 
 /// <summary>One alert of a flagged person.</summary>
 /// <param name="Sentence">What, since when, against the usual.</param>
@@ -92,7 +96,7 @@ public sealed record BriefRow(
     IReadOnlyList<BriefDay> Recent,
     string? Remark);
 
-/// <summary>One day of the small strip beside a name.</summary>
+/// <summary>One day of a strip or picture.</summary>
 /// <param name="Known">False where nothing is known.</param>
 /// <param name="Load">In the group's unit; null where unknown or not computable.</param>
 /// <param name="HeavyLegs">Heavy or fast work of the legs; null where unknown.</param>

@@ -1,5 +1,6 @@
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
+using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Plans;
 using NodaTime;
@@ -23,7 +24,7 @@ public static class BriefBuilder
         var upTo = shown.Where(subject => subject.Days.Count > 0).Max(subject => (LocalDate?)subject.Days[^1].Date);
         var silent = CommonSilence.Of(shown, inboxIsAway);
         var flagged = shown.Where(subject => ToLookAt(subject) && !(silent.Contains(subject) && CommonSilence.IsOnlySilent(subject))).OrderByDescending(Worst).ToList();
-        var asked = CommonSilence.Lines(shown, silent).Concat(questions).ToList();
+        var asked = CommonSilence.Lines(shown, silent).Concat(UnseenAlerts.Lines(contact, date, shown, self)).Concat(questions).ToList();
         return new Brief
         {
             ContactId = contact.Id,
@@ -31,7 +32,7 @@ public static class BriefBuilder
             Date = date,
             DataUpTo = upTo,
             FirstLine = FirstLine.Of(shown, flagged, silent.Count, upTo, asked, self),
-            Flagged = [.. Named(flagged).Select(subject => Flag(subject, contact.Role, self))],
+            Flagged = [.. Named(flagged).Select(subject => Flag(subject, contact.Role, upTo ?? date.PlusDays(-1), self))],
             FlaggedBeyond = Math.Max(0, flagged.Count - FlaggedAtMost),
             Returned = [.. shown.SelectMany(subject => Returned(subject, self))],
             Changed = [.. shown.SelectMany(subject => Changed(subject, self))],
@@ -40,8 +41,8 @@ public static class BriefBuilder
         };
     }
 
-    /// <summary>Standing and told: one that is shelved is not.</summary>
-    internal static bool IsActive(AlertNews news) => AlertLife.IsActive(news.Alert.State) && news.Alert.ShelvedUntil is null;
+    /// <summary>Standing and told: one that is shelved or suppressed is not.</summary>
+    internal static bool IsActive(AlertNews news) => news.Alert.IsTold;
 
     /// <summary>Active alerts, warnings first, then by rule and region.</summary>
     internal static IEnumerable<AlertNews> Active(BriefSubject subject) => subject.Alerts
@@ -90,8 +91,11 @@ public static class BriefBuilder
         return flagged.Where(named.Contains);
     }
 
-    private static FlaggedPerson Flag(BriefSubject subject, ContactRole role, bool self) =>
-        new(subject.Person.Id, NameOf(subject.Person, self), Worst(subject), [.. Active(subject).Select(news => Reason(news, role, self))]);
+    private static FlaggedPerson Flag(BriefSubject subject, ContactRole role, LocalDate upTo, bool self) =>
+        new(subject.Person.Id, NameOf(subject.Person, self), Worst(subject), [.. Active(subject).Select(news => Reason(news, role, self))])
+        {
+            Picture = PersonPictures.Of(subject, upTo),
+        };
 
     private static FlaggedReason Reason(AlertNews news, ContactRole role, bool self) => new(
         news.Alert.Id,

@@ -1,6 +1,7 @@
 using System.Globalization;
 using LoadWatch.Alerts;
 using LoadWatch.Days;
+using LoadWatch.Limits;
 using LoadWatch.Stimulus;
 using NodaTime;
 
@@ -43,11 +44,12 @@ internal static class BriefRows
             known,
             EverHeavy(days, upTo, legs) ? legs?.DaysSince : null,
             legs?.Days28,
-            [.. Enumerable.Range(1 - StripDays, StripDays).Select(offset => Strip(days, upTo.PlusDays(offset)))],
-            Remark(subject, [.. Absent(days, upTo, view), .. Own(subject, today, back, known, NeverHeavy(days, upTo, legs))]));
+            [.. Enumerable.Range(1 - StripDays, StripDays).Select(offset => DayOf(days, upTo.PlusDays(offset)))],
+            Remark(subject, [.. Absent(days, upTo, view), .. RoomOf(subject, upTo, self), .. Own(subject, today, back, known, NeverHeavy(days, upTo, legs))]));
     }
 
-    private static BriefDay Strip(Dictionary<LocalDate, Day> days, LocalDate date)
+    /// <summary>A date without a day is unknown.</summary>
+    public static BriefDay DayOf(Dictionary<LocalDate, Day> days, LocalDate date)
     {
         var day = days.GetValueOrDefault(date);
         return new BriefDay(
@@ -79,6 +81,15 @@ internal static class BriefRows
             .Concat(given.Count > RemarksShown ? [$"{given.Count - RemarksShown} more of the kind"] : Array.Empty<string>());
         var remark = string.Join("; ", all);
         return remark.Length == 0 ? null : remark;
+    }
+
+    /// <summary>Told to whoever reads about themselves, where there is a figure.</summary>
+    private static IEnumerable<string> RoomOf(BriefSubject subject, LocalDate upTo, bool self)
+    {
+        if (self && subject.Room is { Load: not null } room && room.Date == upTo.PlusDays(1))
+        {
+            yield return $"{RoomWords.Of(room)}: {RoomWords.Meaning}";
+        }
     }
 
     /// <summary><c>away since 2 March</c>.</summary>
@@ -118,6 +129,11 @@ internal static class BriefRows
         foreach (var news in subject.Alerts.Where(news => AlertLife.IsActive(news.Alert.State) && news.Alert.ShelvedUntil is not null).OrderBy(news => news.Alert.Id, StringComparer.Ordinal))
         {
             yield return $"shelved until {BriefNumbers.Day(news.Alert.ShelvedUntil)}: {RuleTexts.Named(news.Alert.Key, self: false)}";
+        }
+
+        foreach (var news in subject.Alerts.Where(news => news.Alert.Watch == AlertWatch.SuppressedByDesign && AlertLife.IsActive(news.Alert.State)).OrderBy(news => news.Alert.Id, StringComparer.Ordinal))
+        {
+            yield return $"not watched for now by plan or answers: {RuleTexts.Named(news.Alert.Key, self: false)}";
         }
 
         if (subject.Days.All(day => day.State != DayState.Recorded))

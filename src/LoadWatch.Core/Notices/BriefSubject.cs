@@ -1,6 +1,7 @@
 using LoadWatch.Alerts;
 using LoadWatch.Days;
 using LoadWatch.Findings;
+using LoadWatch.Limits;
 using LoadWatch.People;
 
 namespace LoadWatch.Notices;
@@ -19,10 +20,17 @@ public sealed record BriefSubject(
 {
     /// <summary>Notes of the last date that are to be told.</summary>
     public IReadOnlyList<Finding> Notes { get; init; } = [];
+
+    /// <summary>What the limits leave open on the date behind the last day; null where it is not known yet.</summary>
+    public TodaysRoom? Room { get; init; }
 }
 
 /// <summary>An alert as a contact meets it.</summary>
 /// <param name="IsNew">Raised, raised again or risen since the contact's last brief.</param>
 /// <param name="ReturnedSince">It returned since the contact's last brief.</param>
 /// <param name="Corrected">It returned because later data undid it.</param>
-public sealed record AlertNews(Alert Alert, bool IsNew, bool ReturnedSince, bool Corrected);
+public sealed record AlertNews(Alert Alert, bool IsNew, bool ReturnedSince, bool Corrected)
+{
+    /// <summary>Why it is over, where the limits of its rule were changed or its rule is no longer watched; null: it returned, or see <see cref="Corrected"/>.</summary>
+    public AlertChangeReason? Ended { get; init; }
+}

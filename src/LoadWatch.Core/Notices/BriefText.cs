@@ -70,6 +70,10 @@ public static class BriefText
             }
 
             lines.Paragraph("  ", $"Decides: {WhoDecides(person)}.");
+            if (person.Picture is { } picture)
+            {
+                lines.Paragraph("  ", picture.Words);
+            }
         }
 
         if (brief.FlaggedBeyond > 0)

@@ -48,5 +48,5 @@ internal static class CommonSilence
             $"recordings of {group.Count()} of {shown.Count(subject => subject.Group.Id == group.Key)} people do not come in: one upload, inbox or charger may be the cause, so they are not named one by one"));
 
     private static bool IsSilent(BriefSubject subject) =>
-        subject.Alerts.Any(news => news.Alert.Key.Rule == Rule && AlertLife.IsActive(news.Alert.State) && news.Alert.ShelvedUntil is null);
+        subject.Alerts.Any(news => news.Alert.Key.Rule == Rule && news.Alert.IsTold);
 }

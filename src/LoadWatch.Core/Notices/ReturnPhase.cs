@@ -1,4 +1,5 @@
 using LoadWatch.Days;
+using LoadWatch.Loads;
 
 namespace LoadWatch.Notices;
 

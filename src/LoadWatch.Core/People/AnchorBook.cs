@@ -20,11 +20,14 @@ public sealed class AnchorBook
 
     public static AnchorBook Empty { get; } = new([]);
 
+    /// <summary>What stands in where no maximal heart rate is anchored.</summary>
+    public HeartRateMaxEquation HeartRateMaxEquation { get; init; } = HeartRateMaxEquation.Tanaka;
+
     /// <summary>One person's anchors.</summary>
-    public AnchorBook OfPerson(string person) => new(all.Where(anchor => anchor.Person == person));
+    public AnchorBook OfPerson(string person) => new(all.Where(anchor => anchor.Person == person)) { HeartRateMaxEquation = HeartRateMaxEquation };
 
     /// <summary>This book and more anchors.</summary>
-    public AnchorBook With(IEnumerable<Anchor> more) => new([.. all, .. more]);
+    public AnchorBook With(IEnumerable<Anchor> more) => new([.. all, .. more]) { HeartRateMaxEquation = HeartRateMaxEquation };
 
     /// <summary>Every anchor of a person, in no order.</summary>
     public IEnumerable<Anchor> Of(string person) => all.Where(anchor => anchor.Person == person);

@@ -42,6 +42,6 @@ public sealed record Contact(
     /// <summary>Address for mail, or null for none.</summary>
     public string? Mail { get; init; }
 
-    /// <summary>Names in the bodies of mail; page and notice file, which stay on the machine, hold them in full.</summary>
+    /// <summary>Names in the bodies of mail and webhook; page and notice file, which stay on the machine, hold them in full.</summary>
     public NamesShown Names { get; init; } = NamesShown.Full;
 }

@@ -41,6 +41,8 @@ public sealed record PowerCapacity(Anchor Critical, Anchor? WPrime, Anchor? Maxi
         }
     }
 
+    public EnduranceLimits Limits => new(Critical, WPrime, Maximum, WattsPerUnit: 1);
+
     /// <summary>Null without a critical power.</summary>
     public static PowerCapacity? On(LocalDate date, string person, AnchorBook anchors, Sport sport)
     {

@@ -8,6 +8,8 @@ internal sealed record PageModel(
     string Date,
     string? DataUpTo,
     string Contact,
+    string Past,
+    string FirstLine,
     string Headline,
     string? Lead,
     IReadOnlyList<PagePerson> Flagged,
@@ -21,18 +23,16 @@ internal sealed record PageModel(
 {
     public static PageModel Of(Brief brief)
     {
-        var rows = brief.Groups
-            .SelectMany(group => group.Rows.Select(row => (Group: group, Row: row)))
-            .DistinctBy(pair => pair.Row.PersonId, StringComparer.Ordinal)
-            .ToDictionary(pair => pair.Row.PersonId, StringComparer.Ordinal);
         var (headline, lead) = Split(OneLine.Of(brief.FirstLine));
         return new PageModel(
             BriefText.DateInWords(brief.Date),
             brief.DataUpTo is { } upTo ? BriefText.DateInWords(upTo) : null,
             OneLine.Of(brief.ContactName),
+            PageFile.PastName(Uri.EscapeDataString(brief.ContactId)),
+            OneLine.Of(brief.FirstLine),
             headline,
             lead,
-            [.. brief.Flagged.Select(person => PagePerson.Of(person, StripOf(person.PersonId)))],
+            [.. brief.Flagged.Select(PagePerson.Of)],
             brief.FlaggedBeyond > 0 ? BriefText.Beyond(brief.FlaggedBeyond) : null,
             [.. brief.Returned.Select(Clean)],
             [.. brief.Changed.Select(Clean)],
@@ -40,8 +40,6 @@ internal sealed record PageModel(
             [.. brief.Groups.Select(PageGroup.Of)],
             ReadingNotes.Terms,
             ReadingNotes.Cautions);
-
-        Strip? StripOf(string person) => rows.TryGetValue(person, out var at) ? Strip.Of(at.Row, at.Group.LoadUnit) : null;
     }
 
     /// <summary>The first sentence stands large, the others below it.</summary>
@@ -55,14 +53,14 @@ internal sealed record PageModel(
 }
 
 /// <summary>One person to act on.</summary>
-internal sealed record PagePerson(string Name, string Severity, IReadOnlyList<PageReason> Reasons, string Decides, Strip? Strip)
+internal sealed record PagePerson(string Name, string Severity, IReadOnlyList<PageReason> Reasons, string Decides, PagePicture? Picture)
 {
-    public static PagePerson Of(FlaggedPerson person, Strip? strip) => new(
+    public static PagePerson Of(FlaggedPerson person) => new(
         OneLine.Of(person.Name),
         BriefText.SeverityWord(person.Severity),
         [.. person.Reasons.Select(PageReason.Of)],
         OneLine.Of(BriefText.WhoDecides(person)),
-        strip);
+        person.Picture is { } picture ? new PagePicture(picture) : null);
 }
 
 /// <param name="Mark"><c>new</c>, <c>seen</c> or null.</param>

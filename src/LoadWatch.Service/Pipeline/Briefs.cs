@@ -1,6 +1,8 @@
 using LoadWatch.Alerts;
 using LoadWatch.Days;
+using LoadWatch.Delivery.Mail;
 using LoadWatch.Delivery.Page;
+using LoadWatch.Delivery.Webhook;
 using LoadWatch.Findings;
 using LoadWatch.Notices;
 using LoadWatch.People;
@@ -45,11 +47,11 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         return Freeze(session, notice with { Flagged = flagged }, Ways(contact));
     }
 
-    /// <summary>Only mail is told twice: the page is rewritten anyway.</summary>
+    /// <summary>Only what leaves the machine is told twice: the page is rewritten anyway.</summary>
     private bool DecideUpdate(StoreSession session, Contact contact)
     {
         var date = now.InZone(contact.Zone).Date;
-        var ways = Ways(contact).Where(way => way.Channel == Mail).ToList();
+        var ways = Ways(contact).Where(way => way.Channel is Mail or WebhookChannel.ChannelName).ToList();
         if (ways.Count == 0 || session.Notices.Get(NoticePolicy.BriefKey(contact, date))?.Flagged is not { } told)
         {
             return false;
@@ -70,13 +72,12 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     private Notice Write(Contact contact, Brief brief, string key, string subject, NoticeReason reason)
     {
         var notice = new Notice(key, contact.Id, brief.Date, subject, BriefText.Write(brief), PageRenderer.Render(brief), reason);
-        if (contact.Names == NamesShown.Full)
-        {
-            return notice;
-        }
-
         var mailed = MailNames.Of(brief, contact.Names, configuration.People.Values);
-        return notice with { MailText = BriefText.Write(mailed), MailHtml = PageRenderer.Render(mailed) };
+        return notice with
+        {
+            MailText = contact.Names == NamesShown.Full ? null : BriefText.Write(mailed),
+            MailHtml = IsMailed(contact) ? MailRenderer.Render(mailed) : null,
+        };
     }
 
     private bool Freeze(StoreSession session, Notice notice, IReadOnlyList<Storage.Notices.Delivery> ways) =>
@@ -86,13 +87,20 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     private List<Storage.Notices.Delivery> Ways(Contact contact)
     {
         List<Storage.Notices.Delivery> ways = [new("page", contact.Id), new("log", contact.Id)];
-        if (configuration.Mail is not null && contact.Mail is { } address)
+        if (IsMailed(contact))
         {
-            ways.Add(new Storage.Notices.Delivery(Mail, address));
+            ways.Add(new Storage.Notices.Delivery(Mail, contact.Mail!));
+        }
+
+        if (configuration.Webhook?.Addresses.ContainsKey(contact.Id) == true)
+        {
+            ways.Add(new Storage.Notices.Delivery(WebhookChannel.ChannelName, contact.Id));
         }
 
         return ways;
     }
+
+    private bool IsMailed(Contact contact) => configuration.Mail is not null && contact.Mail is not null;
 
     /// <summary>Of what the contact may be told: an alert that is not for them changes no list of theirs.</summary>
     private string Flagged(StoreSession session, Contact contact)
@@ -122,7 +130,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
             .Select(alert => News(alert, news[alert.Id].ToList()))
             .Where(item => item.Alert.State is AlertState.Unacknowledged or AlertState.Acknowledged || item.ReturnedSince)
             .ToList();
-        return new BriefSubject(person, configuration.Groups[person.Group], days, alerts, Remarks(days)) { Notes = Notes(session, person, through) };
+        return new BriefSubject(person, configuration.GroupOf(person), days, alerts, Remarks(days)) { Notes = Notes(session, person, through), Room = session.Rooms.Of(person.Id) is { } room && room.Date == through.PlusDays(1) ? room : null };
     }
 
     /// <summary>Told for a week from the day on which each came to be a note.</summary>
@@ -138,11 +146,15 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     private static AlertNews News(Alert alert, List<AlertChange> changes)
     {
         var isOver = alert.State is AlertState.Normal or AlertState.Returned;
+        var ended = isOver ? changes.FindLast(change => AlertLife.IsActive(change.From) && !AlertLife.IsActive(change.To)) : null;
         return new AlertNews(
             alert,
             changes.Exists(change => change.Reason is AlertChangeReason.Raised or AlertChangeReason.RaisedAgain or AlertChangeReason.SeverityRose),
-            isOver && changes.Exists(change => change.Reason is AlertChangeReason.ReturnedToNormal or AlertChangeReason.Corrected),
-            isOver && changes.Exists(change => change.Reason == AlertChangeReason.Corrected));
+            ended is not null,
+            ended is { Reason: AlertChangeReason.Corrected })
+        {
+            Ended = ended?.Reason,
+        };
     }
 
     private static List<string> Remarks(IReadOnlyList<Day> days)

@@ -17,6 +17,7 @@ public sealed class DerivedRows
         "DELETE FROM finding WHERE person = @person",
         "DELETE FROM day WHERE person = @person",
         "DELETE FROM question WHERE person = @person",
+        "DELETE FROM todays_room WHERE person = @person",
         "DELETE FROM person_state WHERE person = @person",
         "DELETE FROM anchor_observed WHERE person = @person",
     ];
@@ -25,6 +26,7 @@ public sealed class DerivedRows
     [
         "DELETE FROM finding",
         "DELETE FROM day",
+        "DELETE FROM todays_room",
         "DELETE FROM person_state",
         "DELETE FROM anchor_observed",
         "DELETE FROM histogram",

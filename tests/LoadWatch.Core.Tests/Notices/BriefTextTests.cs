@@ -21,6 +21,9 @@ public sealed class BriefTextTests
           Consider: comparing with what was planned: an easier day, or keeping the
           plan if it was meant.
           Decides: you and the person.
+          56 days to 28 Feb. The last 7 days: 480 AU; a usual week: 400 AU, the
+          middle half of 7 weeks. Load on 42 days, the highest 80 AU on 28 Feb; none
+          on 14. Heavy or fast leg work on 14 days, the last on 27 Feb.
 
         BACK TO USUAL
         - Ben Ollery: Heavy or fast leg work is back.

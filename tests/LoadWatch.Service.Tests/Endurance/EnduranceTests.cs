@@ -6,12 +6,6 @@ public sealed class EnduranceTests(NightlyService nights)
 {
     private const double Mega = 1024 * 1024;
 
-    /// <summary>
-    /// Native memory is looked at over these last nights: until then page caches of the connections fill, and what runs once a week is compiled to its end
-    /// after its thirtieth week.
-    /// </summary>
-    private const int NativeNights = 200;
-
     [Fact]
     public void TheRegressionFindsAGrowth()
     {
@@ -29,7 +23,7 @@ public sealed class EnduranceTests(NightlyService nights)
         var growth = new (string What, double Most, double Found)[]
         {
             ("managed MB", 1, Growth(sample => sample.ManagedMegabytes)),
-            ("native MB", 1, Holding.GrowthPer100Nights([.. nights.Samples.Where(sample => sample.Night >= Season.Nights - NativeNights)], sample => sample.NativeMegabytes)),
+("resident MB", 1, Growth(sample => sample.WorkingSetMegabytes)),
             ("handles", 0.5, Growth(sample => sample.Handles)),
             ("threads", 0.5, Growth(sample => sample.Threads)),
         };

@@ -6,8 +6,8 @@ namespace LoadWatch.Service.Tests.Endurance;
 /// <param name="ManagedMegabytes">Live objects.</param>
 /// <param name="WorkingSetMegabytes">Resident memory.</param>
 /// <param name="NativeMegabytes">
-/// Resident memory that the collector does not hold: code, the database engine's caches, threads. The collector takes and gives back regions of 4 MB each, which
-/// tell nothing of a growth and would drown it; what it holds shows in the live objects.
+/// Resident memory that the collector does not hold: code, the database engine's caches, threads. Printed to find a growth, and not judged: what the collector
+/// says it holds moves in regions of 4 MB, and this the other way.
 /// </param>
 /// <param name="Handles">Open files and the like; 0 where the system does not list them.</param>
 public sealed record Holding(int Night, double ManagedMegabytes, double WorkingSetMegabytes, double NativeMegabytes, int Handles, int Threads)

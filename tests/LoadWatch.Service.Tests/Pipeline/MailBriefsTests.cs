@@ -55,11 +55,24 @@ public sealed class MailBriefsTests : IDisposable
     }
 
     [Fact]
-    public void FullNamesAreKeptOnce()
+    public void ATextWithFullNamesIsKeptOnce()
     {
         Decide(Morning);
 
-        Assert.All(Pending(), pending => Assert.Equal((null, null), (pending.Notice.MailText, pending.Notice.MailHtml)));
+        Assert.All(Pending(), pending => Assert.Null(pending.Notice.MailText));
+    }
+
+    [Fact]
+    public void TheMailIsFrozenWithItsPicturesAndThePageStaysOutOfIt()
+    {
+        Raise("ann");
+        Decide(Morning);
+
+        var mail = Pending().Single(pending => pending.Delivery == Mail);
+        Assert.Contains("<img src=\"data:image/png;base64,", mail.Notice.MailHtml, StringComparison.Ordinal);
+        Assert.DoesNotContain("<svg", mail.Notice.MailHtml, StringComparison.Ordinal);
+        var parts = MailMessageWriter.Write(mail.Notice, "ada@example.org", "brief@example.org").BodyParts;
+        Assert.Equal(["text/plain", "text/html", "image/png"], parts.Select(part => part.ContentType.MimeType));
     }
 
     [Theory]
