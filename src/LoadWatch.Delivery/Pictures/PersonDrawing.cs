@@ -22,23 +22,32 @@ public static class PersonDrawing
     private const float DigitWidth = 7;
     private const double HalfBar = 0.36;
 
+    /// <summary>One picture at a time: the drawing library's caches of fonts are shared, and its own.</summary>
+    private static readonly Lock Pen = new();
+
     private static readonly Color Ink = Colors.Black;
     private static readonly PixelPadding Frame = new(left: 0, right: 20, bottom: 20, top: 8);
 
     /// <summary>A scalable drawing to stand in a page: its ink is the page's own. The same values give the same text.</summary>
     public static string Svg(PersonPicture picture)
     {
-        using var plot = Draw(picture);
-        return InlineSvg.Of(plot.GetSvgXml(Width, Height));
+        lock (Pen)
+        {
+            using var plot = Draw(picture);
+            return InlineSvg.Of(plot.GetSvgXml(Width, Height));
+        }
     }
 
     /// <summary>Black on white, twice as many dots as <see cref="Width"/> and <see cref="Height"/> say. The same values give the same bytes.</summary>
     public static byte[] Png(PersonPicture picture)
     {
-        using var plot = Draw(picture);
-        plot.FigureBackground.Color = Colors.White;
-        plot.ScaleFactor = Dots;
-        return plot.GetImageBytes(Width * Dots, Height * Dots, ImageFormat.Png);
+        lock (Pen)
+        {
+            using var plot = Draw(picture);
+            plot.FigureBackground.Color = Colors.White;
+            plot.ScaleFactor = Dots;
+            return plot.GetImageBytes(Width * Dots, Height * Dots, ImageFormat.Png);
+        }
     }
 
     private static Plot Draw(PersonPicture picture)

@@ -23,11 +23,13 @@ internal sealed class PictureFonts : IFontResolver
 
     public SKTypeface? CreateTypeface(string fontName, bool bold, bool italic) => fontName == Name ? typeface : null;
 
+    /// <summary>From a copy of its bytes, which the typeface keeps: glyphs are read long after the stream is closed, and by several threads.</summary>
     private static PictureFonts Register()
     {
         using var stream = typeof(PictureFonts).Assembly.GetManifestResourceStream(Resource)
             ?? throw new InvalidOperationException($"the resource {Resource} is missing");
-        var fonts = new PictureFonts(SKTypeface.FromStream(stream) ?? throw new InvalidOperationException($"the resource {Resource} is no font"));
+        using var data = SKData.Create(stream);
+        var fonts = new PictureFonts(SKTypeface.FromData(data) ?? throw new InvalidOperationException($"the resource {Resource} is no font"));
         Fonts.FontResolvers.Insert(0, fonts);
         return fonts;
     }

@@ -29,6 +29,25 @@ public sealed partial class PersonDrawingTests
         }
     }
 
+    /// <summary>The font's bytes outlive the stream that they came from, and the drawing library is used by one thread at a time: else the process itself breaks off.</summary>
+    [Fact]
+    public void ManyThreadsDrawTheSamePictureWhileMemoryIsCollected()
+    {
+        var expected = PersonDrawing.Png(Example());
+        var pictures = ParallelEnumerable.Range(0, 64).Select(number =>
+        {
+            if (number % 16 == 0)
+            {
+                GC.Collect();
+                GC.WaitForPendingFinalizers();
+            }
+
+            return number % 2 == 0 ? PersonDrawing.Png(Example()) : [.. PersonDrawing.Svg(Example()).Take(1).Select(_ => (byte)0)];
+        }).ToList();
+
+        Assert.All(pictures.Where(picture => picture.Length > 1), picture => Assert.Equal(expected, picture));
+    }
+
     // Of 56 days, from the newest: 2 unknown, 1 rest, 4 of load in the last seven; 6 of 7 are load before them, the seventh rest. By hand.
     [Fact]
     public void EveryDayIsABarADashOrAHollowSquare()
