@@ -31,9 +31,9 @@ internal static class AnchorProposals
 
     /// <summary>Each entry stands and falls as one.</summary>
     public static IEnumerable<IReadOnlyList<ObservedAnchor>> Of(
-        Person person, LocalDate month, IReadOnlyList<SessionBests> sessions, IReadOnlyList<ShownMaximum> maxima) =>
+        Person person, HeartRateMaxEquation byAge, LocalDate month, IReadOnlyList<SessionBests> sessions, IReadOnlyList<ShownMaximum> maxima) =>
     [
-        HeartRate(person, month, sessions),
+        HeartRate(person, byAge, month, sessions),
         .. OfPower(sessions).SelectMany(sport => new[] { Power(person.Id, month, sport.Key, [.. sport]), PowerMax(person.Id, month, sport.Key, [.. sport]) }),
         Speed(person.Id, month, [.. sessions.Where(IsRun)]),
         .. maxima.GroupBy(one => (one.Exercise, one.Machine)).OrderBy(same => same.Key.Exercise, StringComparer.Ordinal).ThenBy(same => same.Key.Machine, StringComparer.Ordinal)
@@ -50,11 +50,11 @@ internal static class AnchorProposals
 
     /// <summary>
     /// The highest heart rate held for 15 s that two sessions reached. Of those who never go to their limit it lies below the true one; so it is taken only above what age
-    /// lets expect (by Tanaka, whatever equation stands in elsewhere), where the birth year is known.
+    /// lets expect, where the birth year is known.
     /// </summary>
-    private static IReadOnlyList<ObservedAnchor> HeartRate(Person person, LocalDate month, IReadOnlyList<SessionBests> sessions)
+    private static IReadOnlyList<ObservedAnchor> HeartRate(Person person, HeartRateMaxEquation byAge, LocalDate month, IReadOnlyList<SessionBests> sessions)
     {
-        var expected = person.AgeOn(month) is { } age ? HeartRateMaxEquation.Tanaka.BpmAt(age, person.Sex) : null;
+        var expected = person.AgeOn(month) is { } age ? byAge.BpmAt(age, person.Sex) : null;
         var shown = sessions
             .Select(session => (session.Date, Bpm: Math.Floor(session.Best(Channel.HeartRate, HeartRateSeconds) ?? 0)))
             .Where(one => !(one.Bpm > expected + AboveEquationBpm))
@@ -120,7 +120,7 @@ internal static class AnchorProposals
             kilograms,
             CapacityError.Estimated * kilograms,
             shown.Take(SessionsWanted).Max(one => one.Date),
-            "highest maximum that the sets of two dates let expect, by the load chart")
+            "highest maximum that the sets of two dates let expect by their repetitions")
         {
             Exercise = same[0].Exercise,
             Machine = same[0].Machine,

@@ -11,6 +11,8 @@ namespace LoadWatch.Anchors;
 public static class ShownMaxima
 {
     /// <summary>Of rows of set logs.</summary>
+    /// <param name="person">Whose they are.</param>
+    /// <param name="equation">As quantities are estimated by.</param>
     public static IEnumerable<ShownMaximum> Of(IEnumerable<(LocalDate Date, SetRow Row)> rows, Person person, OneRepetitionMaxEquation equation) => rows
         .Select(row => (row.Date, Set: SetRows.Set(row.Row, row.Date, person)))
         .Select(row => (row.Date, row.Set.Machine, Exercise: ExerciseWord.Canonical(row.Set.Exercise), Kilograms: OneRepetitionMaxEstimate.KilogramsOf(row.Set, equation)))

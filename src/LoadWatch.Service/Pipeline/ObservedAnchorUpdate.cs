@@ -78,8 +78,11 @@ public sealed class ObservedAnchorUpdate(WorkingConfiguration configuration, Sto
         List<ObservedAnchor> wanted = [.. standing.Where(one => one.From < first), .. now];
         return wanted.ToHashSet().SetEquals(standing)
             ? null
-            : new Changes(person.Id, first, now, [.. ObservedChange.Between(standing, wanted).Where(change => basis.StatedOf(person).MeasuredOn(change.From, change.Anchor) is null)]);
+            : new Changes(person.Id, first, now, [.. ObservedChange.Between(standing, wanted).Where(change => Matters(change, basis.StatedOf(person)))]);
     }
+
+    /// <summary>A measured value goes before an observed one for ever; but a maximal power counts for some months only, however it came about.</summary>
+    private static bool Matters(ObservedChange change, AnchorBook stated) => change.Anchor.Kind == AnchorKind.PowerMax || stated.MeasuredOn(change.From, change.Anchor) is null;
 
     private IReadOnlyList<ObservedAnchor> Observed(StoreSession session, Person person, LocalDate first, LocalDate last)
     {
@@ -97,7 +100,8 @@ public sealed class ObservedAnchorUpdate(WorkingConfiguration configuration, Sto
             .. session.Activities.QuantitiesLike(person.Id, since, last, QuantityNames.OneRepetitionMaxOf)
                 .SelectMany(one => ShownMaxima.Of(one.Date, one.Quantities, configuration.Computation.Exercises.Keys)),
         ];
-        return ObservedAnchors.Of(person, session.Activities.Bests(person.Id, since, last), [.. maxima], session.ObservedAnchors.OfPerson(person.Id), from, last);
+        return ObservedAnchors.Of(
+            person, configuration.Computation.Equations.HeartRateMaxByAge, session.Activities.Bests(person.Id, since, last), [.. maxima], session.ObservedAnchors.OfPerson(person.Id), from, last);
     }
 
     /// <summary>What of a person changed.</summary>

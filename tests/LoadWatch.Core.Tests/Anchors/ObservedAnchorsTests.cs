@@ -1,5 +1,6 @@
 using CsCheck;
 using LoadWatch.Capacity;
+using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Recordings;
 using NodaTime;
@@ -44,7 +45,7 @@ public class ObservedAnchorsTests
     [Fact]
     public void WhatIsAdoptedGoesOnWhenNothingNewIsShown()
     {
-        var observed = ObservedAnchors.Of(Someone, [AllOut("a", 120, 2, 3), AllOut("b", 300, 2, 10), AllOut("c", 720, 2, 17)], [], [], March, March.PlusMonths(30));
+        var observed = ObservedAnchors.Of(Someone, HeartRateMaxEquation.Tanaka, [AllOut("a", 120, 2, 3), AllOut("b", 300, 2, 10), AllOut("c", 720, 2, 17)], [], [], March, March.PlusMonths(30));
 
         Assert.Equal(3, observed.Count);
     }
@@ -103,7 +104,7 @@ public class ObservedAnchorsTests
 
     [Fact]
     public void WithoutABirthYearNothingElseIsKnown() => Assert.Equal(
-        162, Assert.Single(ObservedAnchors.Of(Given.Person(), [Heart("a", 165, 3), Heart("b", 162, 10)], [], [], March, March)).Value);
+        162, Assert.Single(ObservedAnchors.Of(Given.Person(), HeartRateMaxEquation.Tanaka, [Heart("a", 165, 3), Heart("b", 162, 10)], [], [], March, March)).Value);
 
     [Fact]
     public void TheSecondBestDateOfAnExerciseOnAMachineCounts()
@@ -113,7 +114,7 @@ public class ObservedAnchorsTests
             Press(2, "press_2", 120), Press(2, "press_2", 118), Press(9, "press_2", 110), Press(16, "press_2", 105), Press(9, "press_1", 140), Press(9, null, 90), Press(16, null, 92),
         ];
 
-        var observed = ObservedAnchors.Of(Someone, [], maxima, [], March, March);
+        var observed = ObservedAnchors.Of(Someone, HeartRateMaxEquation.Tanaka, [], maxima, [], March, March);
 
         Assert.Equal([(null, 90.0, 9.0), ("press_2", 110, 11)], observed.Select(one => (one.Machine, one.Value, one.Error)));
         Assert.All(observed, one => Assert.Equal((AnchorKind.OneRepetitionMax, "leg_press"), (one.Kind, one.Exercise)));
@@ -126,10 +127,10 @@ public class ObservedAnchorsTests
     public void GoingOnFromAnyMonthIsTheSameAsAllAtOnce() => Gen.Int[4, 12].Sample(month =>
     {
         var cut = new LocalDate(2026, month, 1);
-        var before = ObservedAnchors.Of(Someone, Season(), [], [], March, cut.PlusMonths(-1));
+        var before = ObservedAnchors.Of(Someone, HeartRateMaxEquation.Tanaka, Season(), [], [], March, cut.PlusMonths(-1));
         var late = Season().Where(session => session.Date >= cut.PlusMonths(-ObservedAnchors.Months)).ToList();
 
-        Assert.Equal(Through(12, Season()), [.. before, .. ObservedAnchors.Of(Someone, late, [], before, cut, new LocalDate(2026, 12, 1))]);
+        Assert.Equal(Through(12, Season()), [.. before, .. ObservedAnchors.Of(Someone, HeartRateMaxEquation.Tanaka, late, [], before, cut, new LocalDate(2026, 12, 1))]);
     });
 
     private static SessionBests[] Season() =>
@@ -138,9 +139,9 @@ public class ObservedAnchorsTests
         AllOut("f", 120, 5, 3, 270), AllOut("g", 300, 6, 10, 270), AllOut("h", 720, 7, 17, 270), AllOut("i", 300, 9, 2, 300), Run("j", 150, 3), Run("k", 420, 10), Run("l", 1200, 17),
     ];
 
-    private static IReadOnlyList<ObservedAnchor> Of(params SessionBests[] sessions) => ObservedAnchors.Of(Someone, sessions, [], [], March, March);
+    private static IReadOnlyList<ObservedAnchor> Of(params SessionBests[] sessions) => ObservedAnchors.Of(Someone, HeartRateMaxEquation.Tanaka, sessions, [], [], March, March);
 
-    private static IReadOnlyList<ObservedAnchor> Through(int month, params SessionBests[] sessions) => ObservedAnchors.Of(Someone, sessions, [], [], March, new LocalDate(2026, month, 1));
+    private static IReadOnlyList<ObservedAnchor> Through(int month, params SessionBests[] sessions) => ObservedAnchors.Of(Someone, HeartRateMaxEquation.Tanaka, sessions, [], [], March, new LocalDate(2026, month, 1));
 
     private static SessionBests AllOut(string key, int seconds, int month, int day, double critical = 250) => new(
         key, new LocalDate(2026, month, day), new Sport("cycling"), Means(Channel.Power, seconds, critical + (18_000.0 / seconds), 100));

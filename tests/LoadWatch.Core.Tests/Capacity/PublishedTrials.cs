@@ -1,8 +1,8 @@
 namespace LoadWatch.Capacity;
 
 /// <summary>
-/// Trials of five people, s and W, with what their authors fitted to them: Weigend, Gray, Obst and Siegler 2022, "Benefits and limitations of a new hydraulic performance
-/// model", arXiv:2207.14295, and the data files published with it.
+/// Trials of five people, s and W, with what their authors fitted to them: Weigend, Gray, Obst and Siegler 2022, arXiv:2207.14295, and the data
+/// files published with it.
 /// </summary>
 internal static class PublishedTrials
 {
