@@ -62,7 +62,12 @@ public sealed class FallingCapacityRule : IRule
         var run = new FindingRun<Bests>(limits.OnDays, limits.OffDays, subject.Memory.Before<RunState<Bests>>(KeyOf(quantity)));
         foreach (var day in subject.Judged)
         {
-            run.Watch(PlanMutes.Of(Name, day.Plan), day.Date);
+            var muted = PlanMutes.Of(Name, day.Plan);
+            if (run.State is not null || (muted is not null && IsShownLately(shown, day.Date, limits)))
+            {
+                run.Watch(muted, day.Date);
+            }
+
             if (day.State == DayState.Recorded && Read(shown, day.Date, limits) is { } read)
             {
                 run.Read(day.Date, read, read.FallPercent > percent, read.FallPercent > Significant.Round(limits.ReturnShare * percent));
@@ -75,6 +80,10 @@ public sealed class FallingCapacityRule : IRule
             }
         }
     }
+
+    /// <summary>Of what has not been shown yet, or long ago, nothing is kept: what is kept of a date hangs on nothing dated later.</summary>
+    private static bool IsShownLately(List<Shown> shown, LocalDate date, FallingCapacityLimits limits) =>
+        shown.Exists(one => one.Date <= date && one.Date > date.PlusDays(-2 * limits.Days));
 
     private static Bests? Read(List<Shown> shown, LocalDate date, FallingCapacityLimits limits)
     {

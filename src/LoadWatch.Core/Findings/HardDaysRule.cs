@@ -38,7 +38,7 @@ public sealed class HardDaysRule : IRule
             rows.Pass(day, faults.MuteLoadOf(day.Date));
             matches.Pass(day);
             since = rows.Standing is null && matches.Standing is null ? null : since ?? day.Date;
-            subject.Memory.Keep(day.Date, Name, rows.Row is null && matches.State is null ? null : new Standing(since, rows.State, rows.Row, matches.State));
+            subject.Memory.Keep(day.Date, Name, rows.Row is null && rows.State is null && matches.State is null ? null : new Standing(since, rows.State, rows.Row, matches.State));
             if (since is { } start)
             {
                 yield return rows.Standing is { } row ? OfRow(subject, day.Date, start, row) : OfMatches(subject, day.Date, start, matches.Standing!);

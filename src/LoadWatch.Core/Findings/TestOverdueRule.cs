@@ -39,7 +39,7 @@ public sealed class TestOverdueRule : IRule
                 counted = new Counted(tested[next], Ever: true);
             }
 
-            muted = PlanMutes.Of(Name, day.Plan) is { } state ? muted?.State == state ? muted : new Muting(state, day.Date) : null;
+            muted = counted is not null && PlanMutes.Of(Name, day.Plan) is { } state ? muted?.State == state ? muted : new Muting(state, day.Date) : null;
             counted = counted is null ? null : counted with { Muted = muted };
             subject.Memory.Keep(day.Date, key, counted);
             if (counted is not null && Period.DaysBetween(counted.From, day.Date) > limits.IntervalDays)

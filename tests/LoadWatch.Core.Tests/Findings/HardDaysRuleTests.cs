@@ -41,6 +41,24 @@ public class HardDaysRuleTests
             Rule.Of(Build(26, [.. Enumerable.Range(0, 27).Where(day => !rest.Contains(day)).Select(day => Activity(day, day < 20 ? 100 : 150))])).Select(finding => finding.Date);
     }
 
+    /// <summary>What stands only by its delay is kept, too (I-5).</summary>
+    [Fact]
+    public void TakenUpBehindAnyDateItTellsTheSame()
+    {
+        var days = DaysOf([.. Usual, .. Repeat(150, 4), 100, 150, 125, 100, 100, .. Repeat(150, 5), 100, 100]);
+        var whole = Rule.Of(days).Select(finding => (finding.Date, finding.Since, finding.Text)).ToList();
+        Assert.Equal([On(24), On(27)], whole.Select(finding => finding.Date).Intersect([On(24), On(27), On(28)])); // By the delay alone, and over.
+        var (carried, taken) = (Carried.Nothing, new List<Finding>());
+        for (var day = 0; day < days.Count; day++)
+        {
+            var memory = new RuleMemory(carried);
+            taken.AddRange(Rule.Evaluate(new RuleSubject(Anna, [.. days.Take(day + 1)], Defaults) { From = On(day), Memory = memory }));
+            carried = Carried.Read(Carried.Write(Carried.Nothing with { Runs = memory.On(On(day)) }));
+        }
+
+        Assert.Equal(whole, taken.Select(finding => (finding.Date, finding.Since, finding.Text)));
+    }
+
     /// <summary>Between 1.2 and 1.3 times the median of 100 a day neither counts nor ends the row.</summary>
     [Theory]
     [InlineData(121, 27, 4)]
