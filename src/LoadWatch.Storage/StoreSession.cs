@@ -2,6 +2,7 @@ using System.Data.Common;
 using Dapper;
 using LoadWatch.Storage.Activities;
 using LoadWatch.Storage.Alerts;
+using LoadWatch.Storage.Anchors;
 using LoadWatch.Storage.Audits;
 using LoadWatch.Storage.Configurations;
 using LoadWatch.Storage.Days;
@@ -36,7 +37,9 @@ public sealed class StoreSession
         Sightings = new SightingTable(this);
         Recordings = new RecordingTable(this);
         Activities = new ActivityTable(this);
+        ObservedAnchors = new ObservedAnchorTable(this);
         Days = new DayTable(this);
+        Rooms = new TodaysRoomTable(this);
         Findings = new FindingTable(this);
         Evaluations = new EvaluationTable(this);
         Alerts = new AlertTable(this);
@@ -65,7 +68,11 @@ public sealed class StoreSession
 
     public ActivityTable Activities { get; }
 
+    public ObservedAnchorTable ObservedAnchors { get; }
+
     public DayTable Days { get; }
+
+    public TodaysRoomTable Rooms { get; }
 
     public FindingTable Findings { get; }
 

@@ -30,6 +30,13 @@ internal static class Given
         Anchor(AnchorKind.PowerMax, 1000, Date.PlusDays(-30)),
     ];
 
+    public static Anchor[] Runner { get; } =
+    [
+        Anchor(AnchorKind.CriticalSpeed, 4),
+        Anchor(AnchorKind.DPrime, 200),
+        Anchor(AnchorKind.SpeedMax, 8, Date.PlusDays(-30)),
+    ];
+
     public static Recording Recording(string sport, SampleSeries samples, params StrengthSet[] sets) => new()
     {
         Part = 1,

@@ -24,12 +24,21 @@ public sealed partial class HealthWordsTests
         Absent("fay", "Fay Nunn", AbsenceWord.Injured),
     ];
 
+    public static TheoryData<ContactRole, BriefForm[]> RolesAndForms =>
+    [
+        .. from role in new[] { ContactRole.Coach, ContactRole.FrontDesk }
+           from forms in Enum.GetValues<BriefForm>().Select(form => new[] { form }).Append(Enum.GetValues<BriefForm>())
+           select (role, forms),
+    ];
+
     [Theory]
-    [InlineData(ContactRole.Coach)]
-    [InlineData(ContactRole.FrontDesk)]
-    public void CoachAndFrontDeskReadNoWordOfHealth(ContactRole role)
+    [MemberData(nameof(RolesAndForms))]
+    public void CoachAndFrontDeskReadNoWordOfHealthInAnyForm(ContactRole role, BriefForm[] forms)
     {
-        var brief = BriefBuilder.Build(Contact(role), Today, People, []);
+        // A Monday, so that week and call list are there, too; everybody is planned.
+        var monday = Today.PlusDays(1);
+        BriefSubject[] planned = [.. People.Select(subject => subject with { Planned = [new PlanEntry(PlanWord.Class, monday, monday, null, null, true, null)], Today = subject.Days[^1].Plan })];
+        var brief = BriefBuilder.Build(Contact(role) with { Forms = forms }, monday, planned, []);
 
         foreach (var names in Enum.GetValues<NamesShown>())
         {
@@ -47,6 +56,13 @@ public sealed partial class HealthWordsTests
         Assert.Matches(OfHealth(), Text(brief));
         Assert.Matches(OfHealth(), Page(brief));
         Assert.Equal("3 of 6 to look at: 1 well above their usual, 1 silent, 1 with a function test to look at.", brief.FirstLine);
+
+        var monday = Today.PlusDays(1);
+        foreach (var form in new[] { BriefForm.CallList, BriefForm.ClassSheet })
+        {
+            BriefSubject[] planned = [.. People.Select(subject => subject with { Planned = [new PlanEntry(PlanWord.Class, monday, monday, null, null, true, null)] })];
+            Assert.Matches(OfHealth(), Text(BriefBuilder.Build(Contact(ContactRole.Clinician) with { Forms = [form] }, monday, planned, [])));
+        }
     }
 
     [Theory]

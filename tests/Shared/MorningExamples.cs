@@ -3,6 +3,7 @@ using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.Notices;
 using LoadWatch.People;
+using LoadWatch.Plans;
 using LoadWatch.Stimulus;
 using NodaTime;
 
@@ -30,6 +31,11 @@ internal static class MorningExamples
     [
         "Agnes Winterbourne", "Bertold Kesselring", "Cordelia Ashgrove", "Dragan Vukotić", "Edith Larkspur", "Fausto Bellandi", "Greta Holmqvist", "Horace Pemberley",
         "Inés Villalobos", "Joachim Rautenberg", "Kirsti Hautamäki", "Leopold Farthing", "Mathilde Corbeau", "Nikolaos Vrettos", "Olwen Prydderch", "Percival Dunstable",
+    ];
+
+    private static readonly string[] MoreClassNames =
+    [
+        "Quentin Marlowe", "Ragnhild Tveit", "Silvester Okonjo", "Theodora Lindqvist", "Umberto Falconi", "Valborg Sandell", "Wendelin Ackermann", "Xenia Dimitrova",
     ];
 
     public static Contact Contact(ContactRole role, string id = "ada", params string[] groups) =>
@@ -82,6 +88,33 @@ internal static class MorningExamples
         Today,
         [.. ClassNames.Select(ClassSubject)],
         []);
+
+    /// <summary>The class on a Monday on which all of them are planned, with every form or those given.</summary>
+    public static Brief EveryForm(params BriefForm[] forms)
+    {
+        var monday = Today.PlusDays(1);
+        var planned = new PlanEntry(PlanWord.Class, monday, monday, new LocalTime(10, 0), new LocalTime(11, 0), true, null);
+        return BriefBuilder.Build(
+            Contact(ContactRole.FrontDesk, "desk", "class") with { Name = "Front desk", Forms = forms.Length > 0 ? forms : Enum.GetValues<BriefForm>() },
+            monday,
+            [.. ClassNames.Concat(MoreClassNames).Select(ClassSubject).Select(subject => subject with { Planned = [planned] })],
+            []);
+    }
+
+    /// <summary>A class of 24 of whom 14 are to be called.</summary>
+    public static Brief BusyDesk(params BriefForm[] forms)
+    {
+        var monday = Today.PlusDays(1);
+        var planned = new PlanEntry(PlanWord.Class, monday, monday, new LocalTime(10, 0), new LocalTime(11, 0), true, null);
+        return BriefBuilder.Build(
+            Contact(ContactRole.FrontDesk, "desk", "squad") with { Name = "Front desk", Forms = forms },
+            monday,
+            [
+                .. SquadNames.Select((name, place) => place < 14 ? Subject($"r{place:00}", name, StimulusGap($"r{place:00}"), place % 2 == 0 ? Silence($"r{place:00}") : LoadRatio($"r{place:00}")) : Subject($"r{place:00}", name))
+                    .Select(subject => subject with { Planned = [planned] }),
+            ],
+            []);
+    }
 
     private static BriefSubject SquadSubject(string name, int place)
     {
@@ -138,6 +171,7 @@ internal static class MorningExamples
             Load = load(back),
             Acute = acute,
             ChronicBefore = before,
+            Coverage7 = Enumerable.Range(back, 7).Count(at => at < count && load(at) is not null) / 7.0,
             RatioUncoupled = before is > 0 ? acute / before : null,
             Regions = new Dictionary<BodyRegion, RegionDay> { [BodyRegion.Legs] = Legs(count, back, heavy) },
         };

@@ -1,4 +1,5 @@
 using System.Globalization;
+using LoadWatch.Capacity;
 using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Quality;
@@ -12,7 +13,9 @@ namespace LoadWatch.Activities;
 public static class ActivityComputation
 {
     /// <summary>Raised by one whenever a formula, a cut or a quantity changes: what an older program computed is then computed again.</summary>
-    public const int Version = 6;
+    public const int Version = 7;
+
+    private static readonly Channel[] WithBestMeans = [Channel.HeartRate, Channel.Power, Channel.Speed];
 
     /// <summary>Anchors are taken as they hold on the recording's local date.</summary>
     /// <exception cref="ArgumentException">The recording carries no date.</exception>
@@ -24,10 +27,9 @@ public static class ActivityComputation
     public static ActivityValues Compute(UsableRecording cut, Person person, AnchorBook anchors, ComputationSettings settings)
     {
         ArgumentNullException.ThrowIfNull(cut);
-        var date = LocalStart.Of(cut.Recording, person).Date;
-        var usable = person.HeartRateIsValidOn(date)
-            ? UpToMaximum(cut, HeartRateMaximum.On(date, person, anchors), settings.Quality)
-            : new UsableRecording(WithoutHeartRate(cut.Recording), settings.UsableShareWanted, settings.Quality);
+        var date = LocalStart.DateOf(cut.Recording, person);
+        var valid = person.HeartRateIsValidOn(date) ? cut : new UsableRecording(WithoutHeartRate(cut.Recording), settings.UsableShareWanted, settings.Quality);
+        var usable = UpToMaximum(valid, HeartRateMaximum.On(date, person, anchors), settings.Quality);
         var loads = ActivityLoads.Of(usable, date, person, anchors, settings);
         var stimulus = SessionStimulus.Of(usable, date, person, anchors, settings);
         return new ActivityValues
@@ -39,12 +41,20 @@ public static class ActivityComputation
             UsableShare = usable.Channels.Values.ToDictionary(channel => channel.Channel, channel => Significant.Round(channel.Share)),
             Cuts = usable.Cuts,
             Histograms = usable.Histograms,
+            BestMeans = Best(valid),
             TimesInZone = loads.TimesInZone,
             Quantities = loads.Quantities,
             Stimulus = stimulus.Regions,
             Remarks = [.. usable.TooLittle.Select(TooLittle), .. loads.Remarks, .. stimulus.Remarks, .. loads.HistogramRemarks],
         };
     }
+
+    /// <summary>Of what no reference value has cut, since reference values are told from them.</summary>
+    private static Dictionary<Channel, BestMeans> Best(UsableRecording usable) => WithBestMeans
+        .Where(channel => usable[channel] is not null)
+        .Select(channel => (Channel: channel, Means: BestMeans.Of(usable[channel]!)))
+        .Where(one => one.Means.Values.Count > 0)
+        .ToDictionary(one => one.Channel, one => one.Means);
 
     /// <summary>Without what is too far above the person's maximum; where none is known all of it stays.</summary>
     private static UsableRecording UpToMaximum(UsableRecording cut, HeartRateMaximum? maximum, QualityLimits limits) =>

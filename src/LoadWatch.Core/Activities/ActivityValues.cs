@@ -1,3 +1,4 @@
+using LoadWatch.Capacity;
 using LoadWatch.Loads;
 using LoadWatch.Quality;
 using LoadWatch.Recordings;
@@ -26,6 +27,9 @@ public sealed record ActivityValues
 
     /// <summary>Of heart rate, power and speed, where usable.</summary>
     public IReadOnlyDictionary<Channel, Histogram> Histograms { get; init; } = new Dictionary<Channel, Histogram>();
+
+    /// <summary>Of heart rate, power and speed, where usable; of heart rate also what lies above the person's maximum.</summary>
+    public IReadOnlyDictionary<Channel, BestMeans> BestMeans { get; init; } = new Dictionary<Channel, BestMeans>();
 
     /// <summary>Of heart rate, power and speed, where the bounds are known.</summary>
     public IReadOnlyList<TimeInZone> TimesInZone { get; init; } = [];

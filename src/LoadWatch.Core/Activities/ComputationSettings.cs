@@ -13,6 +13,9 @@ public sealed record ComputationSettings
     /// <summary>From when on a reading is none.</summary>
     public QualityLimits Quality { get; init; } = new();
 
+    /// <summary>Equations and those of their constants that are from memory.</summary>
+    public EquationChoices Equations { get; init; } = new();
+
     /// <summary>Inner bounds of the heart-rate zones as fractions of heart-rate reserve where thresholds are not anchored (ACSM classes,
     /// Garber 2011).</summary>
     public IReadOnlyList<double> HeartRateReserveBounds { get; init; } = [0.30, 0.40, 0.60, 0.90];

@@ -16,7 +16,7 @@ internal static class JoinWording
 
     public static string Several(StatedSession stated, IReadOnlyList<SessionParts> candidates)
     {
-        var starts = candidates.Select(one => one.Recording).OfType<RecordedActivity>().Select(one => HourAndMinute.Format(one.LocalStart.TimeOfDay)).ToList();
+        var starts = candidates.Select(one => one.Recording).OfType<RecordedActivity>().Select(one => HourAndMinute.Format(one.Winner.Start.WithOffset(one.Winner.LocalOffset).TimeOfDay)).ToList();
         var where = starts.Count > 0
             ? $"the recordings at {Listed(starts)}"
             : $"{candidates.Count} sessions of that date that were not recorded";

@@ -25,7 +25,7 @@ internal static class JoinedSession
         {
             Key = recording?.Winner.Key ?? KeyOfRows(session.Maker),
             Date = date,
-            Start = recording?.Winner.Start ?? (session.Start is { } start ? (date + start).InZoneLeniently(person.Zone).ToInstant() : null),
+            Start = recording?.Winner.Start ?? (session.Start is { } start ? PersonDay.Local(date + start, person).InZoneLeniently(person.Zone).ToInstant() : null),
             Sport = sport,
             Sources = Sorted([.. recording?.Sources ?? [], .. stated.Select(one => one.Source)]),
             Quantities = quantities.Quantities,

@@ -6,7 +6,7 @@ namespace LoadWatch.Activities;
 
 /// <summary>
 /// What a session with table rows asked of each region. Logged sets are the whole work of their session, so they stand for the recording's regions, but
-/// for those that power saw better; they are never added. Declared content speaks only where no channel could see hard work.
+/// for those that power or speed saw better; they are never added. Declared content speaks only where no channel could see hard work.
 /// </summary>
 internal static class JoinedStimulus
 {
@@ -38,8 +38,8 @@ internal static class JoinedStimulus
             return recorded ?? [.. (regions ?? BodyRegions.All).Select(region => EnduranceEstimate.Nothing.For(region, [Unseen]))];
         }
 
-        var ofPower = (recorded ?? []).Where(region => region.Channel == StimulusChannels.Power);
-        return [.. log.Concat(ofPower)
+        var ofChannels = (recorded ?? []).Where(region => region.Channel is StimulusChannels.Power or StimulusChannels.Speed);
+        return [.. log.Concat(ofChannels)
             .GroupBy(region => region.Region)
             .Select(region => region.OrderBy(one => one.Grade).First())
             .OrderBy(region => region.Region)];

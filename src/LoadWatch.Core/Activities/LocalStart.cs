@@ -14,4 +14,8 @@ public static class LocalStart
         var start = recording.Start ?? throw new ArgumentException("the recording carries no date", nameof(recording));
         return start.WithOffset(recording.LocalOffset ?? person.Zone.GetUtcOffset(start));
     }
+
+    /// <summary>The date that it counts for.</summary>
+    /// <inheritdoc cref="Of"/>
+    public static LocalDate DateOf(Recording recording, Person person) => PersonDay.Of(Of(recording, person).LocalDateTime, person);
 }

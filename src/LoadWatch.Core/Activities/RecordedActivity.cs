@@ -4,7 +4,7 @@ namespace LoadWatch.Activities;
 
 /// <summary>One activity of recordings before rows join it.</summary>
 /// <param name="Winner">The winning recording, with what all recordings of the activity together say of the session.</param>
-/// <param name="LocalStart">Local date and time of its start.</param>
+/// <param name="LocalStart">Its start on the clock of the person's days (<see cref="People.PersonDay.Clock"/>): its date is the one that it counts for.</param>
 public sealed record RecordedActivity(RecordingSummary Winner, LocalDateTime LocalStart, ActivityValues Values)
 {
     /// <summary>Of all its recordings, whichever of them count.</summary>

@@ -1,5 +1,6 @@
 using LoadWatch.People;
 using LoadWatch.Recordings;
+using NodaTime;
 
 namespace LoadWatch.Activities;
 
@@ -29,6 +30,7 @@ public static class RecordingSummaries
             SamplesDigest.Of(recording))
         {
             DistanceMetres = recording.DistanceMetres,
+            DayBegins = Duration.FromNanoseconds(person.DayBeginsAt.NanosecondOfDay),
         };
     }
 

@@ -36,8 +36,14 @@ public sealed record RecordingSummary(
     /// <summary><c>sha/part</c>: the key of the activity that this recording wins.</summary>
     public string Key => RecordingKey.Of(Sha, Part);
 
+    /// <summary>When the day of its owner begins, after midnight.</summary>
+    public Duration DayBegins { get; init; } = Duration.Zero;
+
+    /// <summary>Its start on a clock that shows midnight when the day of its owner begins (<see cref="People.PersonDay.Clock"/>).</summary>
+    public LocalDateTime Clock => (Start - DayBegins).WithOffset(LocalOffset).LocalDateTime;
+
     /// <summary>The local date that the session counts for.</summary>
-    public LocalDate Date => Start.WithOffset(LocalOffset).Date;
+    public LocalDate Date => Clock.Date;
 
     /// <summary>After the elapsed time; where that is unknown with the last usable reading, and without one the start itself.</summary>
     public Instant End => Start + Duration.Max(Duration.Zero, Duration.Min(Longest, Length));

@@ -30,7 +30,7 @@ internal static class SetLists
             Mark = mark,
             Order = sets.Min(set => set.Row.Order),
             Start = sets.Min(set => set.Row.Time),
-            Sets = StatedSets.Of([.. sets.Select(set => SetRows.Set(set.Row, date, person.Zone))], date, person, anchors, settings),
+            Sets = StatedSets.Of([.. sets.Select(set => SetRows.Set(set.Row, date, person))], date, person, anchors, settings),
         };
     }
 

@@ -1,3 +1,4 @@
+using LoadWatch.People;
 using LoadWatch.Recordings;
 using LoadWatch.Rows;
 using NodaTime;
@@ -8,8 +9,8 @@ namespace LoadWatch.Activities;
 internal static class SetRows
 {
     /// <summary>The number of a pin is no load in kilograms.</summary>
-    public static StrengthSet Set(SetRow row, LocalDate date, DateTimeZone zone) => new(
-        row.Time is { } time ? (date + time).InZoneLeniently(zone).ToInstant() : null,
+    public static StrengthSet Set(SetRow row, LocalDate date, Person person) => new(
+        row.Time is { } time ? PersonDay.Local(date + time, person).InZoneLeniently(person.Zone).ToInstant() : null,
         row.Seconds,
         Active: true,
         Exercise(row),

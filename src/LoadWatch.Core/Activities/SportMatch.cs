@@ -19,14 +19,13 @@ public enum SportFit
 }
 
 /// <summary>
-/// Which sports may be one session. A watch at a match is often set to running, so team sports and running are one family; so are a sport and its
-/// machine, and all strength and gymnastics of the gym. <c>generic</c> says nothing. A choice.
+/// Which sports may be one session: those of one family (<see cref="Sport.Family"/>), all strength and gymnastics of the gym among them. <c>generic</c> says nothing. A
+/// choice.
 /// </summary>
 public static class SportMatch
 {
     private const string Run = "running";
     private const string Ride = "cycling";
-    private const string Row = "rowing";
     private const string Gym = "training";
     private const string Unsaid = "generic";
 
@@ -38,20 +37,20 @@ public static class SportMatch
             return SportFit.Possible;
         }
 
-        var isFamily = Family(stated) == Family(recorded);
+        var isFamily = stated.Family == recorded.Family;
         if (stated.Name == recorded.Name && (isFamily || stated.Detail is null || recorded.Detail is null))
         {
             return stated.Detail is not null && stated.Detail == recorded.Detail ? SportFit.Exact : SportFit.Same;
         }
 
-        return isFamily || Family(stated) == Unsaid || Family(recorded) == Unsaid ? SportFit.Possible : SportFit.None;
+        return isFamily || stated.Family == Unsaid || recorded.Family == Unsaid ? SportFit.Possible : SportFit.None;
     }
 
     /// <summary>Whether logged sets may have been done in a recording: never in a run, walk, match or ride.</summary>
     /// <param name="ownSets">Number of sets that the recording holds itself.</param>
     public static SportFit OfSets(Sport recorded, int ownSets)
     {
-        var family = Family(recorded);
+        var family = recorded.Family;
         if (family is Run or Ride || recorded.IsOnFoot)
         {
             return SportFit.None;
@@ -64,15 +63,4 @@ public static class SportMatch
 
         return family is Gym or Unsaid ? SportFit.Possible : SportFit.None;
     }
-
-    private static string Family(Sport sport) => sport switch
-    {
-        { Name: "fitness_equipment", Detail: "treadmill" } => Run,
-        { Name: "fitness_equipment", Detail: "indoor_cycling" or "spin" } => Ride,
-        { Name: "fitness_equipment", Detail: "indoor_rowing" } => Row,
-        { Name: "fitness_equipment" } => Gym,
-        { Name: "e_biking" } => Ride,
-        { IsTeamSport: true } => Run,
-        _ => sport.Name,
-    };
 }

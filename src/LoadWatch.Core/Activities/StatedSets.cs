@@ -15,8 +15,8 @@ internal sealed record StatedSets(int Count, IReadOnlyList<RegionStimulus> Stimu
 {
     public static StatedSets Of(IReadOnlyList<StrengthSet> work, LocalDate date, Person person, AnchorBook anchors, ComputationSettings settings)
     {
-        var stimulus = SessionOfSets.Of(work, date, person.Id, anchors, settings.Exercises);
-        var (totals, remark) = SetTotals.Of(work);
+        var stimulus = SessionOfSets.Of(work, date, person, anchors, settings);
+        var (totals, remark) = SetTotals.Of(work, settings.Equations.OneRepetitionMaxByRepetitions);
         return new StatedSets(work.Count, stimulus.Regions, totals, remark is null ? stimulus.Remarks : [.. stimulus.Remarks, remark]);
     }
 

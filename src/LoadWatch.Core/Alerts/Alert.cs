@@ -35,6 +35,14 @@ public sealed record Alert(
     /// <summary>Last date, inclusive, up to which it is not told; null: it is. Shelving stands beside the state and changes none.</summary>
     public LocalDate? ShelvedUntil { get; init; }
 
+    public AlertWatch Watch { get; init; }
+
+    /// <summary>Names the limits of its rule by which its finding held last (<see cref="RuleBook.LimitsHash"/>); null: not known.</summary>
+    public string? LimitsHash { get; init; }
+
+    /// <summary>Whether it stands and is told: neither shelved nor suppressed.</summary>
+    public bool IsTold => AlertLife.IsActive(State) && Watch == AlertWatch.Watched && ShelvedUntil is null;
+
     /// <summary><c>person|rule|about|raised</c>: the region or the quantity, empty where there is neither.</summary>
     public string Id => $"{Key.Person}|{Key.Rule}|{Key.Quantity ?? RegionWord(Key.Region)}|{Raised:uuuu-MM-dd}";
 
@@ -59,6 +67,18 @@ public enum AlertChangeReason
 
     /// <summary>It is told again: the date has passed, it asks for more than before, or the shelving was withdrawn.</summary>
     Unshelved,
+
+    /// <summary>Plan or answers turn its rule off: it is not told while they do, or over where nothing would hold.</summary>
+    SuppressedByPlan,
+
+    /// <summary>Its rule is no longer turned off by plan or answers, and it still holds.</summary>
+    WatchedAgain,
+
+    /// <summary>The limits switch its rule off.</summary>
+    RuleSwitchedOff,
+
+    /// <summary>It holds no more because the limits of its rule are others.</summary>
+    LimitsChanged,
 }
 
 /// <summary>One appended row of an alert's history, with the evidence of its moment.</summary>

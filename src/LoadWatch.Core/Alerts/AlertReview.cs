@@ -19,27 +19,34 @@ public static class AlertReview
     /// <param name="lastSequence">The last sequence written for an alert id, 0 for none.</param>
     /// <param name="findings">Findings of the evaluation date, as known now; those of other people or dates, and notes, are passed over.</param>
     /// <param name="heldOn">Whether, as known now, the finding holds on a date: tells a correction from a return.</param>
+    /// <param name="watching">What limits and plan say of the rules; null: every rule is on, by the limits that it always had.</param>
     public static AlertReviewResult Review(
         string person,
         LocalDate evaluationDate,
         IReadOnlyList<Alert> current,
         Func<string, int> lastSequence,
         IReadOnlyList<Finding> findings,
-        Func<FindingKey, LocalDate, bool> heldOn)
+        Func<FindingKey, LocalDate, bool> heldOn,
+        Watching? watching = null)
     {
-        var held = findings.Where(finding => finding.Person == person && finding.Date == evaluationDate && finding.Severity > Severity.Note).ToDictionary(finding => finding.Key);
+        var watch = watching ?? Watching.Everything;
+        var ofDate = findings.Where(finding => finding.Person == person && finding.Date == evaluationDate).ToList();
+        var held = ofDate.Where(finding => finding.Severity > Severity.Note).ToDictionary(finding => finding.Key);
+        var suppressed = ofDate.Where(finding => finding.Severity == Severity.Suppressed).Select(finding => finding.Key).ToHashSet();
         var standing = current.Where(alert => alert.Key.Person == person && alert.State != AlertState.Normal).ToList();
         var known = standing.Select(alert => alert.Key).ToHashSet();
         return Gather([
-            .. standing.Select(alert => Judge(alert, evaluationDate, held.GetValueOrDefault(alert.Key), lastSequence, heldOn)),
-            .. held.Values.Where(finding => !known.Contains(finding.Key)).Select(finding => RaiseNew(finding, lastSequence)),
+            .. standing.Select(alert => alert.Judged > evaluationDate ? new Reviewed(alert)
+                : held.TryGetValue(alert.Key, out var finding) ? Held(alert, finding, watch, lastSequence)
+                : NotHeld(alert, evaluationDate, Why(alert, evaluationDate, suppressed, heldOn, watch), lastSequence)),
+            .. held.Values.Where(finding => !known.Contains(finding.Key)).Select(finding => RaiseNew(finding, watch, lastSequence)),
         ]);
     }
 
     /// <summary>Somebody confirms having seen the alert; nothing changes where there is nothing to acknowledge.</summary>
     /// <param name="date">The date of the confirmation.</param>
     public static AlertReviewResult Acknowledge(Alert alert, LocalDate date, Func<string, int> lastSequence) =>
-        Gather([Step(alert, AlertSignal.Acknowledge, date, evidence: null, lastSequence)]);
+        Gather([Step(new Reviewed(alert), AlertSignal.Acknowledge, date, evidence: null, lastSequence)]);
 
     /// <summary>Somebody wants not to be told of an alert up to a date; nothing changes where it does not stand or is shelved up to that date already.</summary>
     /// <param name="until">Last date, inclusive.</param>
@@ -52,31 +59,35 @@ public static class AlertReview
     public static AlertReviewResult Unshelve(Alert alert, LocalDate date, Func<string, int> lastSequence) =>
         Gather([Shelving(new Reviewed(alert), null, AlertChangeReason.Unshelved, date, lastSequence)]);
 
-    private static Reviewed Judge(
-        Alert alert,
-        LocalDate date,
-        Finding? finding,
-        Func<string, int> lastSequence,
-        Func<FindingKey, LocalDate, bool> heldOn)
+    private static Reviewed Held(Alert alert, Finding finding, Watching watching, Func<string, int> lastSequence)
     {
-        if (alert.Judged > date)
-        {
-            return new Reviewed(alert);
-        }
-
-        if (finding is null)
-        {
-            // Judged before on this very date: a later file undid it. Else what a later file settled counts only back at its raising.
-            var signal = alert.Judged < date && heldOn(alert.Key, alert.Raised) ? AlertSignal.Return : AlertSignal.Correct;
-            return Step(alert with { ShelvedUntil = null }, signal, date, evidence: null, lastSequence);
-        }
-
-        var judged = alert with { Judged = date, Severity = finding.Severity, Text = finding.Text };
-        var stepped = Step(judged, Signal(alert, finding), date, finding.Evidence, lastSequence);
-        return HasPassed(alert.ShelvedUntil, date) || finding.Severity > alert.Severity
-            ? Shelving(stepped, null, AlertChangeReason.Unshelved, date, lastSequence)
+        var judged = alert with { Judged = finding.Date, Severity = finding.Severity, Text = finding.Text, LimitsHash = watching.HashOf(finding.Rule) };
+        var resumed = Step(new Reviewed(judged), AlertSignal.Resume, finding.Date, evidence: null, lastSequence);
+        var stepped = Step(resumed, Signal(alert, finding), finding.Date, finding.Evidence, lastSequence);
+        return HasPassed(alert.ShelvedUntil, finding.Date) || finding.Severity > alert.Severity
+            ? Shelving(stepped, null, AlertChangeReason.Unshelved, finding.Date, lastSequence)
             : stepped;
     }
+
+    /// <summary>What is suppressed goes on, as far as anybody can tell; everything else is over.</summary>
+    private static Reviewed NotHeld(Alert alert, LocalDate date, AlertSignal why, Func<string, int> lastSequence) => why == AlertSignal.Suppress
+        ? Step(new Reviewed(AlertLife.IsActive(alert.State) ? alert with { Judged = date } : alert), why, date, evidence: null, lastSequence)
+        : Step(new Reviewed(alert with { ShelvedUntil = null }), why, date, evidence: null, lastSequence);
+
+    /// <summary>
+    /// Why a finding is not there. A rule that is off, or turned off by plan, says nothing, whatever came late; judged before on this very date, a later file undid
+    /// it; else what changed counts only back at its raising.
+    /// </summary>
+    private static AlertSignal Why(Alert alert, LocalDate date, HashSet<FindingKey> suppressed, Func<FindingKey, LocalDate, bool> heldOn, Watching watching) =>
+        watching.WhyQuiet(alert) switch
+        {
+            QuietReason.RuleOff => AlertSignal.TakeOut,
+            _ when suppressed.Contains(alert.Key) => AlertSignal.Suppress,
+            QuietReason.SuppressedByPlan => AlertSignal.Mute,
+            _ when alert.Judged < date && heldOn(alert.Key, alert.Raised) => AlertSignal.Return,
+            QuietReason.LimitsChanged => AlertSignal.ChangeLimits,
+            _ => AlertSignal.Correct,
+        };
 
     /// <summary>A date is evaluated on the day after it: that day is the first on which it can be told again.</summary>
     private static bool HasPassed(LocalDate? until, LocalDate evaluationDate) => evaluationDate >= until;
@@ -90,21 +101,22 @@ public static class AlertReview
         }
         : AlertSignal.Raise;
 
-    private static Reviewed RaiseNew(Finding finding, Func<string, int> lastSequence)
+    private static Reviewed RaiseNew(Finding finding, Watching watching, Func<string, int> lastSequence)
     {
-        var alert = new Alert(finding.Key, finding.Date, finding.Date, AlertState.Normal, finding.Severity, finding.Text);
-        return Step(alert, AlertSignal.Raise, finding.Date, finding.Evidence, lastSequence);
+        var alert = new Alert(finding.Key, finding.Date, finding.Date, AlertState.Normal, finding.Severity, finding.Text) { LimitsHash = watching.HashOf(finding.Rule) };
+        return Step(new Reviewed(alert), AlertSignal.Raise, finding.Date, finding.Evidence, lastSequence);
     }
 
-    private static Reviewed Step(Alert alert, AlertSignal signal, LocalDate date, Evidence? evidence, Func<string, int> lastSequence)
+    private static Reviewed Step(Reviewed reviewed, AlertSignal signal, LocalDate date, Evidence? evidence, Func<string, int> lastSequence)
     {
-        if (AlertLife.Next(alert.State, signal) is not { } step)
+        var alert = reviewed.Alert;
+        if (AlertLife.Next(alert.State, alert.Watch, signal) is not { } step)
         {
-            return new Reviewed(alert);
+            return reviewed;
         }
 
-        var change = Change(alert, lastSequence(alert.Id) + 1, date, step.To, step.Reason) with { Evidence = evidence };
-        return new Reviewed(alert with { State = step.To }, change);
+        var change = Change(alert, lastSequence(alert.Id) + 1 + reviewed.Changes.Length, date, step.To, step.Reason) with { Evidence = evidence };
+        return new Reviewed(alert with { State = step.To, Watch = step.Watch }, [.. reviewed.Changes, change]);
     }
 
     /// <summary>Sets or ends shelving behind what a review found already.</summary>
@@ -134,5 +146,5 @@ public static class AlertReview
 
 /// <summary>What a review leaves behind, both in order of the alert's id.</summary>
 /// <param name="Alerts">Every alert that was looked at and every new one, those that just became normal included.</param>
-/// <param name="Changes">At most one for each alert, and one more where its shelving ends.</param>
+/// <param name="Changes">At most one for each alert, and one more each where its suppression and its shelving end.</param>
 public sealed record AlertReviewResult(IReadOnlyList<Alert> Alerts, IReadOnlyList<AlertChange> Changes);

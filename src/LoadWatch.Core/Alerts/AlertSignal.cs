@@ -20,4 +20,19 @@ public enum AlertSignal
 
     /// <summary>The finding turns out not to have held when it was judged (I-14).</summary>
     Correct,
+
+    /// <summary>The finding holds no more by limits that were changed.</summary>
+    ChangeLimits,
+
+    /// <summary>The finding would hold, but plan or answers turn its rule off.</summary>
+    Suppress,
+
+    /// <summary>The finding holds, and its rule is no longer turned off.</summary>
+    Resume,
+
+    /// <summary>Plan or answers turn its rule off, and nothing tells that the finding would hold.</summary>
+    Mute,
+
+    /// <summary>The limits in force switch its rule off.</summary>
+    TakeOut,
 }

@@ -18,4 +18,6 @@ internal sealed record CalendarDate(
     IReadOnlyDictionary<string, LocalDate> Sources)
 {
     public double? Load => DayLoad.Of(State, [.. Activities.Where(activity => activity.AddsLoad).Select(activity => activity.Load)]);
+
+    public double? LoadError => Load is null ? null : DayLoad.ErrorOf(Activities.Where(activity => activity.AddsLoad).Select(activity => activity.Session?.LoadError));
 }

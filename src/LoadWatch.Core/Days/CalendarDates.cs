@@ -43,7 +43,7 @@ internal static class CalendarDates
             recorded = dates[index].Count > 0 ? index : recorded;
             sources = Seen(sources, dates[index], date);
             var planned = plan.On(date);
-            var (state, source) = State(dates[index].Count > 0, planned.RestStatedBy, witnesses[index]);
+            var (state, source) = State(dates[index].Count > 0, planned.RestStatedBy, planned.Expected > 0 ? null : witnesses[index]);
             yield return new CalendarDate(date, state, source, index - recorded, dates[index], planned, sources);
         }
     }

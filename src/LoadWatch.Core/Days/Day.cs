@@ -32,6 +32,12 @@ public sealed record Day
     /// <summary>Load of the date: 0 for rest, null when unknown or when an activity's load could not be computed.</summary>
     public double? Load { get; init; }
 
+    /// <summary>
+    /// Standard error of the load, in its unit: the root of the sum of squares of those of the sessions whose load was converted; null where none was, or the load is
+    /// unknown. What a load has by its own method is not in it.
+    /// </summary>
+    public double? LoadError { get; init; }
+
     /// <summary>Sum of the last 7 days, scaled to 7 covered days; null under 5 covered days.</summary>
     public double? Acute { get; init; }
 
@@ -56,6 +62,20 @@ public sealed record Day
 
     /// <summary>(Last 7 days - the 7 before) / the 7 before, both scaled; fraction.</summary>
     public double? WeeklyChange { get; init; }
+
+    /// <summary>
+    /// The same against the last week before that plan and answers do not set aside and that holds some load; null where one of the two is not known.
+    /// </summary>
+    public double? WeeklyChangeOrdinary { get; init; }
+
+    /// <summary>The usual week: the median of the 8 newest ordinary weeks of the 16 before the last 7 days; null under 6 of them.</summary>
+    public double? UsualWeek { get; init; }
+
+    /// <summary>Load of the largest session of the last 30 days, this one among them; null without any.</summary>
+    public double? LargestSession30 { get; init; }
+
+    /// <summary>Distance of the longest run of the last 30 days, this one among them, metres; null without any.</summary>
+    public double? LongestRunMetres30 { get; init; }
 
     public double? Monotony { get; init; }
 
@@ -102,6 +122,26 @@ public sealed record RegionDay(bool? HeavyOrFast, int? Days7, int? Days28, int? 
     /// <summary>There was no heavy-or-fast day since the region can be seen, however long ago.</summary>
     [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingDefault)]
     public bool Never { get; init; }
+
+    /// <summary>Heavy-or-fast days among the last 14; null when none of them is known.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public int? Days14 { get; init; }
+
+    /// <summary>The person's usual number in 14 days, from the 56 before them; null where less than 70 % of those is known.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public double? Usual14 { get; init; }
+
+    /// <summary>How many of the last 7 days are known.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingDefault)]
+    public int Known7 { get; init; }
+
+    /// <summary>The same of 14 days.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingDefault)]
+    public int Known14 { get; init; }
+
+    /// <summary>The same of 28 days.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingDefault)]
+    public int Known28 { get; init; }
 
     /// <summary>Before any channel could see the region.</summary>
     public static RegionDay NotCovered { get; } = new(null, null, null, null, 0, null);

@@ -11,4 +11,17 @@ internal static class DayLoad
         DayState.Recorded when adding.Count > 0 && adding.All(load => load.HasValue) => Significant.Round(adding.Sum(load => load!.Value)),
         _ => null,
     };
+
+    /// <summary>The root of the sum of squares of the errors that there are; null without any.</summary>
+    /// <param name="errors">Of the sessions that add to the date, in key order.</param>
+    public static double? ErrorOf(IEnumerable<double?> errors)
+    {
+        double? squares = null;
+        foreach (var error in errors)
+        {
+            squares = error is { } known ? squares.GetValueOrDefault() + (known * known) : squares;
+        }
+
+        return squares is { } sum && double.IsFinite(sum) ? Significant.Round(Math.Sqrt(sum)) : null;
+    }
 }

@@ -1,6 +1,6 @@
+using System.Text.Json.Serialization;
 using LoadWatch.Activities;
 using LoadWatch.Loads;
-using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using NodaTime;
 
@@ -16,6 +16,14 @@ namespace LoadWatch.Days;
 public sealed record DaySession(
     string Key, string Sport, double? Load, IReadOnlyDictionary<string, double> Quantities, IReadOnlyDictionary<Channel, double> UsableShare, bool AddsLoad)
 {
+    /// <summary>Name of the quantity that its load was converted from; null where it has the group's load itself.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public string? ConvertedFrom { get; init; }
+
+    /// <summary>Standard error of a converted load, in the unit of the group's load; null where it was not converted by a line.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public double? LoadError { get; init; }
+
     /// <param name="names">Quantities that the person's group looks at: its load, what stands in for it, what its limits name.</param>
     public static DaySession Of(JoinedActivity activity, double? load, IReadOnlySet<string> names) => new(
         activity.Key,

@@ -15,31 +15,29 @@ internal static class HeavyOrFast
     };
 
     /// <summary>Whether some activity of the date had a figure that could see hard work of the region.</summary>
-    public static bool IsSeen(CalendarDate date, BodyRegion region) => date.Activities.Any(activity => Of(activity, region).Any(stimulus => stimulus.SeesHardWork));
-
-    private static bool? JudgeWork(CalendarDate date, BodyRegion region)
-    {
-        if (Reaches(date, region))
-        {
-            return true;
-        }
-
-        return HasUnseenWork(date, region) ? null : false;
-    }
-
-    private static bool Reaches(CalendarDate date, BodyRegion region)
-    {
-        var work = date.Activities.SelectMany(activity => Of(activity, region)).ToList();
-        return HeavyOrFastLine.Reached(
-            work.Sum(stimulus => stimulus.HardBouts?.Mid ?? 0),
-            work.Sum(stimulus => stimulus.HardRepetitions?.Mid ?? 0),
-            work.Sum(stimulus => stimulus.HardSets ?? 0));
-    }
+    public static bool IsSeen(CalendarDate date, BodyRegion region) => date.Activities.Any(activity => activity.Stimulus.Any(stimulus => stimulus.Region == region && stimulus.SeesHardWork));
 
     /// <summary>An activity without an entry for the region is no work of it.</summary>
-    private static bool HasUnseenWork(CalendarDate date, BodyRegion region) =>
-        date.Activities.Any(activity => Of(activity, region).Any() && !Of(activity, region).Any(stimulus => stimulus.SeesHardWork));
+    private static bool? JudgeWork(CalendarDate date, BodyRegion region)
+    {
+        var (bouts, repetitions, sets, unseen) = (0.0, 0.0, 0, false);
+        foreach (var activity in date.Activities)
+        {
+            var (told, seen) = (false, false);
+            foreach (var stimulus in activity.Stimulus)
+            {
+                if (stimulus.Region == region)
+                {
+                    (told, seen) = (true, seen || stimulus.SeesHardWork);
+                    bouts += stimulus.HardBouts?.Mid ?? 0;
+                    repetitions += stimulus.HardRepetitions?.Mid ?? 0;
+                    sets += stimulus.HardSets ?? 0;
+                }
+            }
 
-    private static IEnumerable<RegionStimulus> Of(ActivityOnDay activity, BodyRegion region) =>
-        activity.Stimulus.Where(stimulus => stimulus.Region == region);
+            unseen |= told && !seen;
+        }
+
+        return HeavyOrFastLine.Reached(bouts, repetitions, sets) ? true : unseen ? null : false;
+    }
 }

@@ -8,7 +8,7 @@ namespace LoadWatch.Days;
 public static class LoadCalendar
 {
     /// <summary>Raised when days or findings come out otherwise of the same sessions: then everybody's are computed anew, and nothing is decoded.</summary>
-    public const int Version = 2;
+    public const int Version = 3;
 
     /// <summary>No value and no rule looks further back than this; what would is carried (<see cref="Carried"/>). Days.</summary>
     public const int LookBackDays = 400;
@@ -33,9 +33,10 @@ public static class LoadCalendar
         string person, IReadOnlyList<Day> before, IReadOnlyList<ActivityOnDay> activities, LocalDate to, PersonPlan plan)
     {
         var loads = LoadTrend.After(before);
+        var sessions = SessionTrend.After(before);
         var regions = BodyRegions.All.Select(region => StimulusTrend.After(region, before)).ToList();
         return CalendarDates.Lay(before.Count == 0 ? null : before[^1], activities, to, plan)
-            .Select(date => loads.Add(Bare(person, date)) with { Regions = Regions(regions, date) })
+            .Select(date => loads.Add(Bare(person, date, sessions, regions)))
             .ToList();
     }
 
@@ -47,22 +48,32 @@ public static class LoadCalendar
         var trend = new LoadTrend(firstCovered);
         return [.. days.Select(day => trend.Add(day with
         {
+            LoadError = null,
             Load = DayLoad.Of(day.State, [.. day.Sessions.Where(session => session.AddsLoad).Select(session => load(day, session))]),
         }))];
     }
 
-    private static Day Bare(string person, CalendarDate date) => new()
+    private static Day Bare(string person, CalendarDate date, SessionTrend trend, List<StimulusTrend> regions)
     {
-        Person = person,
-        Date = date.Date,
-        State = date.State,
-        StateSource = date.StateSource,
-        Load = date.Load,
-        DaysSinceRecorded = date.DaysSinceRecorded,
-        Plan = date.Plan,
-        Sessions = [.. date.Activities.Select(activity => activity.Session).OfType<DaySession>()],
-        Carried = new Carried { Sources = date.Sources },
-    };
+        DaySession[] sessions = [.. date.Activities.Select(activity => activity.Session).OfType<DaySession>()];
+        var (largest, longestRun) = trend.Add(sessions);
+        return new Day
+        {
+            Person = person,
+            Date = date.Date,
+            State = date.State,
+            StateSource = date.StateSource,
+            Load = date.Load,
+            LoadError = date.LoadError,
+            DaysSinceRecorded = date.DaysSinceRecorded,
+            Plan = date.Plan,
+            Sessions = sessions,
+            LargestSession30 = largest,
+            LongestRunMetres30 = longestRun,
+            Regions = Regions(regions, date),
+            Carried = new Carried { Sources = date.Sources },
+        };
+    }
 
     private static Dictionary<BodyRegion, RegionDay> Regions(List<StimulusTrend> trends, CalendarDate date) =>
         trends.ToDictionary(trend => trend.Region, trend => trend.Add(date));

@@ -9,7 +9,7 @@ internal static class LoadSpread
 {
     private const int Days = 7;
 
-    /// <summary>Of the last 7 loads, dimensionless; null unless all are known and they differ.</summary>
+    /// <summary>Of the last 7 loads, dimensionless; null unless all are known and they differ, by more than a number can hold the square of.</summary>
     /// <param name="loads">Oldest first.</param>
     public static double? Monotony(ReadOnlySpan<double?> loads)
     {
@@ -25,7 +25,8 @@ internal static class LoadSpread
             squares += (load!.Value - mean) * (load.Value - mean);
         }
 
-        return Significant.Round(mean / Math.Sqrt(squares / (Days - 1)));
+        var deviation = Math.Sqrt(squares / (Days - 1));
+        return deviation > 0 && double.IsFinite(deviation) ? Significant.Round(mean / deviation) : null;
     }
 
     /// <summary>In the load's unit; null without monotony.</summary>

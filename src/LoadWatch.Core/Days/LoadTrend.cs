@@ -23,6 +23,7 @@ internal sealed class LoadTrend(LocalDate? firstCovered = null)
     private readonly RunningMedian chronicMedian = new();
     private readonly WeightedAverage acuteAverage = new(7);
     private readonly WeightedAverage chronicAverage = new(28);
+    private readonly WeekTrend weeks = new();
     private LocalDate? firstCovered = firstCovered;
 
     /// <summary>The trends as they stood on the last of some days: all of them, or the last <see cref="LoadCalendar.LookBackDays"/>.</summary>
@@ -39,6 +40,7 @@ internal sealed class LoadTrend(LocalDate? firstCovered = null)
         {
             trend.loads.Add(day.Load);
             trend.Learn(day.Chronic);
+            trend.weeks.Learn(day);
         }
 
         trend.acuteAverage.GoOnFrom(last.EwmaAcute);
@@ -52,48 +54,46 @@ internal sealed class LoadTrend(LocalDate? firstCovered = null)
         loads.Add(day.Load);
         firstCovered ??= day.Load.HasValue ? day.Date : null;
         var covered = firstCovered <= day.Date ? Period.DaysBetween(firstCovered.Value, day.Date) : (int?)null;
-        return WithMedian(WithSpread(WithAverages(WithWeeks(day with { DaysSinceFirstCovered = covered }))));
+        var sums = Sums(covered);
+        var (averageAcute, averageChronic) = (acuteAverage.Add(day.Load), chronicAverage.Add(day.Load));
+        var monotony = LoadSpread.Monotony(Loads);
+        var (usual, change) = weeks.Add(day.Date, sums.Acute, sums.Coverage7, day.Plan);
+        Learn(sums.Chronic);
+        return day with
+        {
+            DaysSinceFirstCovered = covered,
+            Acute = sums.Acute,
+            Chronic = sums.Chronic,
+            ChronicBefore = sums.ChronicBefore,
+            RatioCoupled = Ratio(sums.Acute, sums.Chronic),
+            RatioUncoupled = Ratio(sums.Acute, sums.ChronicBefore),
+            RatioEwma = sums is { Acute: not null, Chronic: not null } ? Ratio(averageAcute, averageChronic) : null,
+            EwmaAcute = averageAcute,
+            EwmaChronic = averageChronic,
+            WeeklyChange = Ratio(sums.Acute - sums.LastWeek, sums.LastWeek),
+            WeeklyChangeOrdinary = change,
+            UsualWeek = usual,
+            Monotony = monotony,
+            Strain = LoadSpread.Strain(sums.Acute, monotony),
+            ChronicMedian = chronicMedian.Value,
+            Coverage7 = sums.Coverage7,
+            Coverage28 = sums.Coverage28,
+        };
     }
 
     private ReadOnlySpan<double?> Loads => CollectionsMarshal.AsSpan(loads);
 
-    private Day WithWeeks(Day day)
+    private WeekSums Sums(int? covered)
     {
         var (week, month) = (LoadWindow.Of(Loads, 0, 7), LoadWindow.Of(Loads, 0, 28));
-        var acute = week.MeanWeek(KnownOf7);
-        var chronic = day.DaysSinceFirstCovered >= 27 ? month.MeanWeek(KnownOf28) : null;
-        var before = chronic.HasValue ? LoadWindow.Of(Loads, 7, 21).MeanWeek(KnownOf21) : null;
-        var lastWeek = LoadWindow.Of(Loads, 7, 7).MeanWeek(KnownOf7);
-        return day with
-        {
-            Acute = acute,
-            Chronic = chronic,
-            ChronicBefore = before,
-            RatioCoupled = Ratio(acute, chronic),
-            RatioUncoupled = Ratio(acute, before),
-            WeeklyChange = Ratio(acute - lastWeek, lastWeek),
-            Coverage7 = week.Coverage,
-            Coverage28 = month.Coverage,
-        };
-    }
-
-    private Day WithAverages(Day day)
-    {
-        var (acute, chronic) = (acuteAverage.Add(day.Load), chronicAverage.Add(day.Load));
-        var covered = day.Acute.HasValue && day.Chronic.HasValue;
-        return day with { EwmaAcute = acute, EwmaChronic = chronic, RatioEwma = covered ? Ratio(acute, chronic) : null };
-    }
-
-    private Day WithSpread(Day day)
-    {
-        var monotony = LoadSpread.Monotony(Loads);
-        return day with { Monotony = monotony, Strain = LoadSpread.Strain(day.Acute, monotony) };
-    }
-
-    private Day WithMedian(Day day)
-    {
-        Learn(day.Chronic);
-        return day with { ChronicMedian = chronicMedian.Value };
+        var chronic = covered >= 27 ? month.MeanWeek(KnownOf28) : null;
+        return new WeekSums(
+            week.MeanWeek(KnownOf7),
+            LoadWindow.Of(Loads, 7, 7).MeanWeek(KnownOf7),
+            chronic,
+            chronic.HasValue ? LoadWindow.Of(Loads, 7, 21).MeanWeek(KnownOf21) : null,
+            week.Coverage,
+            month.Coverage);
     }
 
     private void Learn(double? chronic)
@@ -104,4 +104,7 @@ internal sealed class LoadTrend(LocalDate? firstCovered = null)
     }
 
     private static double? Ratio(double? value, double? over) => over is null or 0 ? null : Significant.Round(value / over);
+
+    /// <summary>Of the weeks that end with a date.</summary>
+    private readonly record struct WeekSums(double? Acute, double? LastWeek, double? Chronic, double? ChronicBefore, double Coverage7, double Coverage28);
 }

@@ -58,7 +58,7 @@ public sealed class RestatedSessions(
 
     private Dictionary<string, double> Told(DaySession session, IReadOnlyDictionary<Channel, Histogram> ofSession, LocalDate heartRateOn, LocalDate speedOn)
     {
-        var (ofHeartRate, _) = HeartRateLoads.Of(ofSession.GetValueOrDefault(Channel.HeartRate), heartRateOn, person, anchors);
+        var (ofHeartRate, _) = HeartRateLoads.Of(ofSession.GetValueOrDefault(Channel.HeartRate), heartRateOn, person, anchors, settings.Equations);
         var top = session.Quantities.TryGetValue(QuantityNames.SpeedTop, out var metresPerSecond) ? metresPerSecond : (double?)null;
         var ofSpeed = SpeedLoads.OfHistogram(
             ofSession.GetValueOrDefault(Channel.Speed), Sport.Parse(session.Sport), top, anchors.On(speedOn, person.Id, AnchorKind.SpeedMax), settings);

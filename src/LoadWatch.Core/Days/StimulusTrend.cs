@@ -11,7 +11,11 @@ internal sealed class StimulusTrend(BodyRegion region)
     private const int UsualDays = 365;
     private const int GapsWanted = 4;
 
+    /// <summary>Share of the days behind the usual number that must be known. A choice, as that of the rule at its default.</summary>
+    private const double KnownShare = 0.7;
+
     private readonly List<bool?> judged = [];
+    private readonly HeavyTally tally = new();
     private readonly List<int> heavyDays = [];
     private readonly RunningMedian gaps = new();
     private int oldestHeavy;
@@ -28,7 +32,11 @@ internal sealed class StimulusTrend(BodyRegion region)
         var trend = new StimulusTrend(region);
         if (days.Count > 0 && days[^1].Regions.GetValueOrDefault(region) is { DaysSince: { } ago } last)
         {
-            trend.judged.AddRange(days.Select(day => day.Regions.GetValueOrDefault(region)?.HeavyOrFast));
+            foreach (var day in days)
+            {
+                trend.Learn(day.Regions.GetValueOrDefault(region)?.HeavyOrFast);
+            }
+
             trend.knownDaysSince = last.KnownDaysSince;
             trend.Remember(trend.Today - ago, last.Never);
         }
@@ -43,11 +51,32 @@ internal sealed class StimulusTrend(BodyRegion region)
             return RegionDay.NotCovered;
         }
 
-        judged.Add(HeavyOrFast.Judge(date, region));
+        Learn(HeavyOrFast.Judge(date, region));
         Count();
         ForgetOldGaps();
-        var usual = gaps.Count >= GapsWanted ? gaps.Value : null;
-        return new RegionDay(judged[^1], HeavyAmong(7), HeavyAmong(28), Today - LastHeavy, knownDaysSince, usual) { Never = heavyDays.Count == 0 };
+        return Told();
+    }
+
+    private RegionDay Told()
+    {
+        var (week, fortnight, month) = (tally.Among(Today, 7), tally.Among(Today, HeavyTally.WindowDays), tally.Among(Today, 28));
+        return new RegionDay(judged[^1], Number(week), Number(month), Today - LastHeavy, knownDaysSince, gaps.Count >= GapsWanted ? gaps.Value : null)
+        {
+            Never = heavyDays.Count == 0,
+            Days14 = Number(fortnight),
+            Usual14 = tally.Usual(Today, KnownShare),
+            Known7 = week.Known,
+            Known14 = fortnight.Known,
+            Known28 = month.Known,
+        };
+    }
+
+    private static int? Number(HeavyCount count) => count.Known == 0 ? null : count.Heavy;
+
+    private void Learn(bool? heavyOrFast)
+    {
+        judged.Add(heavyOrFast);
+        tally.Add(heavyOrFast);
     }
 
     private int Today => judged.Count - 1;
@@ -89,17 +118,5 @@ internal sealed class StimulusTrend(BodyRegion region)
             gaps.Remove(oldestHeavy + 1 < heavyDays.Count ? heavyDays[oldestHeavy + 1] - heavyDays[oldestHeavy] : null);
             oldestHeavy++;
         }
-    }
-
-    private int? HeavyAmong(int days)
-    {
-        var (heavy, known) = (0, 0);
-        for (var index = Math.Max(0, judged.Count - days); index < judged.Count; index++)
-        {
-            heavy += judged[index] is true ? 1 : 0;
-            known += judged[index].HasValue ? 1 : 0;
-        }
-
-        return known == 0 ? null : heavy;
     }
 }

@@ -3,7 +3,7 @@ using System.ComponentModel.DataAnnotations;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>falling_capacity</c>: the best of the last weeks is below the best of the weeks before.</summary>
-public sealed record FallingCapacityLimits
+public sealed record FallingCapacityLimits : IDelayedLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;
@@ -27,4 +27,19 @@ public sealed record FallingCapacityLimits
     /// <summary>Fall of an estimated one-repetition maximum beyond its error: 10.6 to 13.5 % of the mean in direct tests. Percent.</summary>
     [Range(1.0, 50.0)]
     public double OneRepetitionMaxPercent { get; init; } = 14;
+
+    /// <summary>Over when the fall is this share of the error, or less. A choice. 0 to 1.</summary>
+    [Range(0.0, 1.0)]
+    public double ReturnShare { get; init; } = 0.7;
+
+    /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. A choice. Days.</summary>
+    [Range(1, 14)]
+    public int OnDays { get; init; } = 1;
+
+    /// <summary>Dates in a row, of those that can be read, on which it must be so no more before it is over. A choice. Days.</summary>
+    [Range(1, 14)]
+    public int OffDays { get; init; } = 1;
+
+    /// <summary>As what it is raised. A choice.</summary>
+    public RaisedAs Severity { get; init; } = RaisedAs.Notice;
 }

@@ -4,7 +4,6 @@ using LoadWatch.Activities;
 using LoadWatch.Days;
 using LoadWatch.Loads;
 using LoadWatch.People;
-using LoadWatch.Plans;
 using NodaTime;
 
 namespace LoadWatch.Findings;
@@ -17,12 +16,15 @@ public sealed class FallingCapacityRule : IRule
 {
     public string Name => "falling_capacity";
 
-    public bool IsEnabled(RuleLimits limits) => limits.FallingCapacity.Enabled;
+    public RuleRecord Record { get; } = new FallingCapacityRecord();
+
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.FallingCapacity;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var limits = subject.Limits.FallingCapacity;
-        var shown = subject.Activities.SelectMany(activity => ShownBy(activity, limits)).ToLookup(one => one.Quantity.Name, StringComparer.Ordinal);
+        var faults = new SensorFaults(subject);
+        var shown = subject.Activities.SelectMany(activity => ShownBy(activity, limits, faults)).ToLookup(one => one.Quantity.Name, StringComparer.Ordinal);
         return shown.Select(one => one.Key)
             .Concat(subject.Memory.KeysBefore.Where(key => key.StartsWith(KeyOf(""), StringComparison.Ordinal)).Select(key => key[KeyOf("").Length..]))
             .Distinct(StringComparer.Ordinal)
@@ -32,9 +34,10 @@ public sealed class FallingCapacityRule : IRule
 
     private string KeyOf(string quantity) => $"{Name}/{quantity}";
 
-    /// <summary>A walk shows no top speed, and a sensor that writes nought shows nothing.</summary>
-    private static IEnumerable<Shown> ShownBy(JoinedActivity activity, FallingCapacityLimits limits) => activity.Quantities
+    /// <summary>A walk shows no top speed, and a sensor that fails or writes nought shows nothing.</summary>
+    private static IEnumerable<Shown> ShownBy(JoinedActivity activity, FallingCapacityLimits limits, SensorFaults faults) => activity.Quantities
         .Where(quantity => Percent(quantity.Name, limits) is not null && quantity.Value > 0)
+        .Where(quantity => !faults.Mutes(activity, quantity.Name))
         .Where(quantity => quantity.Name != QuantityNames.SpeedTop || activity.Sport.Name is not ("walking" or "hiking"))
         .Select(quantity => new Shown(activity.Date, activity.Sport.IsTeamSport ? "team" : activity.Sport.Name, quantity));
 
@@ -55,27 +58,32 @@ public sealed class FallingCapacityRule : IRule
 
     private IEnumerable<Finding> Evaluate(RuleSubject subject, string quantity, List<Shown> shown, double percent)
     {
-        var run = new FindingRun<Bests>(onDays: 1, subject.Memory.Before<RunState<Bests>>(KeyOf(quantity)));
+        var limits = subject.Limits.FallingCapacity;
+        var run = new FindingRun<Bests>(limits.OnDays, limits.OffDays, subject.Memory.Before<RunState<Bests>>(KeyOf(quantity)));
         foreach (var day in subject.Judged)
         {
-            if (IsOff(day))
+            var muted = PlanMutes.Of(Name, day.Plan);
+            if (run.State is not null || (muted is not null && IsShownLately(shown, day.Date, limits)))
             {
-                run.End();
+                run.Watch(muted, day.Date);
             }
-            else if (day.State == DayState.Recorded && Read(shown, day.Date, subject.Limits.FallingCapacity) is { } read)
+
+            if (day.State == DayState.Recorded && Read(shown, day.Date, limits) is { } read)
             {
-                run.Read(day.Date, read, read.FallPercent > percent, read.FallPercent > percent);
+                run.Read(day.Date, read, read.FallPercent > percent, read.FallPercent > Significant.Round(limits.ReturnShare * percent));
             }
 
             subject.Memory.Keep(day.Date, KeyOf(quantity), run.State);
             if (run is { Since: { } start, Reading: { } bests })
             {
-                yield return Find(subject.Person, day.Date, quantity, start, bests, percent, subject.Limits.FallingCapacity);
+                yield return Find(subject.Person, day.Date, quantity, start, bests, percent, limits).Unless(run.Muted);
             }
         }
     }
 
-    private static bool IsOff(Day day) => day.Plan.Absence is not null || day.Plan.ReturnDay is not null || day.Plan.IsIn(PlanWord.OffSeason);
+    /// <summary>Of what has not been shown yet, or long ago, nothing is kept: what is kept of a date hangs on nothing dated later.</summary>
+    private static bool IsShownLately(List<Shown> shown, LocalDate date, FallingCapacityLimits limits) =>
+        shown.Exists(one => one.Date <= date && one.Date > date.PlusDays(-2 * limits.Days));
 
     private static Bests? Read(List<Shown> shown, LocalDate date, FallingCapacityLimits limits)
     {
@@ -93,7 +101,7 @@ public sealed class FallingCapacityRule : IRule
         date,
         Name,
         Region: null,
-        Severity.Notice,
+        limits.Severity.Severity(),
         since,
         bests.FallPercent,
         percent,
@@ -122,6 +130,9 @@ public sealed class FallingCapacityRule : IRule
             new("best_before", bests.Early.Quantity.Value, bests.Early.Quantity.Unit, $"on {Wording.IsoDate(bests.Early.Date)}, of {bests.EarlySessions} sessions"),
             new("fall", bests.FallPercent, "percent"),
             new("error", percent, "percent"),
+            new("return_share", limits.ReturnShare, "share"),
+            new("on_days", limits.OnDays, "days"),
+            new("off_days", limits.OffDays, "days"),
             new("stretch", limits.Days, "days"),
             new("sessions_wanted", limits.SessionsWanted, "count"),
         ]);

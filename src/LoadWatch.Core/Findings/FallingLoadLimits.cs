@@ -4,7 +4,7 @@ using System.Text.Json.Serialization;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>falling_load</c>: the usual load is fading. All a choice; 0.34 has a basis in studies of reduced volume.</summary>
-public sealed record FallingLoadLimits
+public sealed record FallingLoadLimits : IDelayedLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;
@@ -36,4 +36,12 @@ public sealed record FallingLoadLimits
     /// <summary>Ordinary weeks wanted among them. Weeks.</summary>
     [Range(3, 12)]
     public int WeeksWanted { get; init; } = 6;
+
+    /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. A choice. Days.</summary>
+    [Range(1, 14)]
+    public int OnDays { get; init; } = 1;
+
+    /// <summary>Dates in a row, of those that can be read, on which it must be so no more before it is over. A choice. Days.</summary>
+    [Range(1, 14)]
+    public int OffDays { get; init; } = 1;
 }

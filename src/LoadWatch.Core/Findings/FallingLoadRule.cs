@@ -5,6 +5,7 @@
 // Departures: the group's load stands for volume, and intensity is not looked at here.
 using System.Runtime.InteropServices;
 using LoadWatch.Days;
+using LoadWatch.Plans;
 using NodaTime;
 
 namespace LoadWatch.Findings;
@@ -21,7 +22,9 @@ public sealed class FallingLoadRule : IRule
 
     public string Name => "falling_load";
 
-    public bool IsEnabled(RuleLimits limits) => limits.FallingLoad.Enabled;
+    public RuleRecord Record { get; } = new FallingLoadRecord();
+
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.FallingLoad;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) => WatchedSeries.Of(subject, subject.Limits.FallingLoad.Quantities)
         .SelectMany(series => Evaluate(subject, series, subject.Limits.FallingLoad))
@@ -30,15 +33,12 @@ public sealed class FallingLoadRule : IRule
     private IEnumerable<Finding> Evaluate(RuleSubject subject, WatchedSeries series, FallingLoadLimits limits)
     {
         var key = series.KeyOf(this);
-        var run = new FindingRun<Fall>(onDays: 1, subject.Memory.Before<RunState<Fall>>(key));
+        var run = new FindingRun<Fall>(limits.OnDays, limits.OffDays, subject.Memory.Before<RunState<Fall>>(key));
         for (var index = subject.First; index < series.Days.Count; index++)
         {
             var day = series.Days[index];
-            if (day.Plan.IsAwayOrReturning() || day.Plan.IsLight())
-            {
-                run.End();
-            }
-            else if (Read(series.Days, index, limits) is { } fall)
+            run.Watch(PlanMutes.Of(Name, day.Plan), day.Date);
+            if (Read(series.Days, index, limits) is { } fall)
             {
                 run.Read(day.Date, fall, fall.Ratio < limits.Notice, fall.Ratio < Math.Max(limits.Return, limits.Notice));
             }
@@ -46,7 +46,7 @@ public sealed class FallingLoadRule : IRule
             subject.Memory.Keep(day.Date, key, run.State);
             if (run is { Since: { } since, Reading: { } read })
             {
-                yield return Find(series, day.Date, since, read, limits);
+                yield return Find(series, day.Date, since, read, limits).Unless(run.Muted);
             }
         }
     }
@@ -60,10 +60,9 @@ public sealed class FallingLoadRule : IRule
             return null;
         }
 
-        var ordinary = PastWeek.Before(days, oldest - 1, limits.Weeks, KnownOf7).Where(one => one.IsOrdinary).ToList();
-        return ordinary.Count < limits.WeeksWanted || PastWeek.Median(ordinary) is not { } usual
-            ? null
-            : new Fall(days[index].Date, week.Value, loads.Count(load => load.HasValue), usual, ordinary.Count, Significant.Round(week.Value / usual));
+        return UsualWeek.Of(PastWeek.Before(days, oldest - 1, limits.Weeks, KnownOf7), limits.Weeks, limits.WeeksWanted) is { } usual
+            ? new Fall(days[index].Date, week.Value, loads.Count(load => load.HasValue), usual.Load, usual.Weeks, Significant.Round(week.Value / usual.Load))
+            : null;
     }
 
     /// <summary>Loads of the last days that are not set aside, newest first, and the index of the oldest.</summary>
@@ -125,6 +124,8 @@ public sealed class FallingLoadRule : IRule
             new("notice", limits.Notice, "ratio"),
             new("warning", limits.Warning, "ratio"),
             new("return", limits.Return, "ratio"),
+            new("on_days", limits.OnDays, "days"),
+            new("off_days", limits.OffDays, "days"),
             new("covered_of_14_wanted", limits.CoveredOf14, "days"),
             new("weeks", limits.Weeks, "count"),
             new("weeks_wanted", limits.WeeksWanted, "count"),

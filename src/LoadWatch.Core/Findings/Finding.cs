@@ -27,6 +27,21 @@ public sealed record Finding(
     /// <summary>Name of the quantity that the rule looked at where it is not the group's load; null for the load.</summary>
     public string? Quantity { get; init; }
 
+    /// <summary>The same where a planned state turns the rule off: no alert, and it says why. Null: the rule is watched.</summary>
+    public Finding Unless(Muting? muted) => muted is null ? this : this with
+    {
+        Severity = Severity.Suppressed,
+        Text = $"{Text} Not watched: {PlanMutes.Word(muted.State)} since {Wording.Date(muted.Since, Date)}.",
+        Evidence = Evidence with
+        {
+            Inputs =
+            [
+                .. Evidence.Inputs,
+                new("not_watched", Period.DaysBetween(muted.Since, Date) + 1, "days", $"{PlanMutes.Word(muted.State)} since {Wording.IsoDate(muted.Since)}"),
+            ],
+        },
+    };
+
     /// <summary>What the finding is about, the same on every date.</summary>
     public FindingKey Key => new(Person, Rule, Region, Quantity);
 }

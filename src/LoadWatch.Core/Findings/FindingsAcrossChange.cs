@@ -20,13 +20,16 @@ public sealed class FindingsAcrossChange(IReadOnlyList<ReferenceChange> changes,
     /// <param name="former">Of the rules of load, by the former values.</param>
     public IReadOnlyList<Finding> Judge(IReadOnlyList<Finding> now, IReadOnlyList<Finding> former)
     {
-        var before = former.ToDictionary(finding => (finding.Date, finding.Key));
+        var before = former.Where(IsWatched).ToDictionary(finding => (finding.Date, finding.Key));
         var names = RuleBook.OfLoad.Select(rule => rule.Name).ToHashSet(StringComparer.Ordinal);
-        var judged = now.Select(finding => names.Contains(finding.Rule) ? Judge(finding, before.GetValueOrDefault((finding.Date, finding.Key))) : finding);
+        var judged = now.Select(finding => names.Contains(finding.Rule) && IsWatched(finding) ? Judge(finding, before.GetValueOrDefault((finding.Date, finding.Key))) : finding);
         var held = now.Select(finding => (finding.Date, finding.Key)).ToHashSet();
-        var kept = former.Where(finding => finding.Since < since && !held.Contains((finding.Date, finding.Key))).Select(Kept);
+        var kept = former.Where(finding => IsWatched(finding) && finding.Since < since && !held.Contains((finding.Date, finding.Key))).Select(Kept);
         return RuleBook.InOrder(judged.Concat(kept));
     }
+
+    /// <summary>What plan or answers suppress is no alert by any value.</summary>
+    private static bool IsWatched(Finding finding) => finding.Severity != Severity.Suppressed;
 
     private Finding Judge(Finding now, Finding? former)
     {

@@ -1,4 +1,5 @@
-// The latest function test against its published cut-off (FunctionTests) and against the one before, down by more than the error of the test (limits, a choice).
+// The latest function test against its published cut-off (FunctionTests) and against the one before of equal conditions, down by more than the error of the test (limits, a
+// choice). The better hand or try of a date counts for the cut-off, as the source has it.
 using LoadWatch.People;
 using LoadWatch.Rows;
 using NodaTime;
@@ -6,8 +7,9 @@ using NodaTime;
 namespace LoadWatch.Findings;
 
 /// <summary>
-/// A function test lies beyond a published cut-off, or fell by more than its error. Stands from the date of the test to the next of its kind, a year at most. For
-/// those contacts only who may see health; it names a figure and a cut-off, nothing else.
+/// A function test lies beyond a published cut-off, fell by more than its error, or could not be done. Stands from the date of the test to the next of its kind that is
+/// better by some, a year at most. A fall under other conditions (hand, device, height of the chair) is told and is no alert. For those contacts only who may see health; it
+/// names a figure and a cut-off, nothing else.
 /// </summary>
 public sealed class FunctionTestRule : IRule
 {
@@ -15,121 +17,97 @@ public sealed class FunctionTestRule : IRule
 
     public string Name => RuleName;
 
-    public bool IsEnabled(RuleLimits limits) => limits.FunctionTest.Enabled;
+    public RuleRecord Record { get; } = new FunctionTestRecord();
+
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.FunctionTest;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) =>
         FunctionTests.All.SelectMany(test => Evaluate(subject, test)).OrderBy(finding => finding.Date);
 
     private IEnumerable<Finding> Evaluate(RuleSubject subject, FunctionTest test)
     {
-        var results = Results(subject.Tests, test);
+        var limits = subject.Limits.FunctionTest;
+        var dates = TestDate.Of(subject.Tests, test);
         var key = $"{Name}/{test.Word}";
-        var known = subject.Memory.Before<Known>(key);
-        if (results.Count == 0 && known is null)
+        var known = subject.Memory.Before<TestsKnown>(key);
+        if (dates.Count == 0 && known is null)
         {
             yield break;
         }
 
+        var cutOff = test.Limit(limits, subject.Person.Sex);
         var next = 0;
         foreach (var day in subject.Judged)
         {
-            for (; next < results.Count && results[next].Date <= day.Date; next++)
+            for (; next < dates.Count && dates[next].Date <= day.Date; next++)
             {
-                known = new Known(Judge(subject, test, results[next], known?.Valued), results[next].Value.HasValue ? results[next] : known?.Valued);
+                known = (known ?? TestsKnown.None).After(dates[next], test, cutOff, limits);
             }
 
-            if (known?.Judged is { } ended && day.Date >= ended.Result.Date.PlusDays(subject.Limits.FunctionTest.HoldDays))
+            if (known?.Judged is { } ended && day.Date >= ended.Date.PlusDays(limits.HoldDays))
             {
                 known = known with { Judged = null };
             }
 
-            subject.Memory.Keep(day.Date, key, known is { Judged: null, Valued: null } ? null : known);
+            subject.Memory.Keep(day.Date, key, known is { Judged: null, Latest.Count: 0 } ? null : known);
             if (known?.Judged is { } judged)
             {
-                yield return Find(subject.Person, test, day.Date, judged);
+                yield return Find(subject.Person, test, day.Date, judged, cutOff, limits);
             }
         }
     }
 
-    /// <summary>One result a date: the better hand or try; one that could not be done only where nothing else was.</summary>
-    private static List<Result> Results(IReadOnlyList<DatedTest> tests, FunctionTest test) =>
-    [
-        .. tests
-            .Where(dated => dated.Test.Test == test.Word)
-            .GroupBy(dated => dated.Date)
-            .OrderBy(sameDate => sameDate.Key)
-            .Select(sameDate => ResultOf(sameDate.Key, [.. sameDate.Select(dated => dated.Test)], test)),
-    ];
-
-    private static Result ResultOf(LocalDate date, List<TestRow> rows, FunctionTest test)
-    {
-        var done = rows.Where(row => row is { Value: not null, Outcome: null }).Select(row => row.Value!.Value).ToList();
-        double? value = done.Count == 0 ? null : test.MoreIsBetter ? done.Max() : done.Min();
-        return new Result(date, value, value is null ? rows.Select(row => row.Outcome).FirstOrDefault(outcome => outcome is not null) : null);
-    }
-
-    private static Judgement? Judge(RuleSubject subject, FunctionTest test, Result result, Result? before)
-    {
-        var limit = test.Limit(subject.Person.Sex);
-        if (result.Value is not { } value)
-        {
-            return result.Outcome is { } outcome ? new Judgement(result, before, limit, 0, Ended(test, outcome)) : null;
-        }
-
-        if (limit is { } cutOff && test.IsBeyond(value, cutOff))
-        {
-            return new Judgement(result, before, limit, 0, $"{test.Words} the published cut-off of {Number(cutOff)} {test.Unit}");
-        }
-
-        var error = Error(test, subject.Limits.FunctionTest);
-        var fall = before?.Value is { } earlier ? Significant.Round(test.MoreIsBetter ? earlier - value : value - earlier) : 0;
-        return fall > error
-            ? new Judgement(result, before, limit, error, $"{Number(before!.Value!.Value)} {test.Unit} the time before, a change beyond the error of {Number(error)} {test.Unit}")
-            : null;
-    }
-
-    private static string Ended(FunctionTest test, TestOutcome outcome) => outcome == TestOutcome.UsedArms ? "done with the arms" : "could not be done";
-
-    private static double Error(FunctionTest test, FunctionTestLimits limits) => test.Word switch
-    {
-        FunctionTests.Grip => limits.GripKilograms,
-        FunctionTests.ChairStands => limits.ChairStandSeconds,
-        FunctionTests.Gait => limits.GaitMetresPerSecond,
-        FunctionTests.UpAndGo => limits.UpAndGoSeconds,
-        FunctionTests.PerformanceBattery => limits.PerformanceBatteryPoints,
-        _ => double.PositiveInfinity,
-    };
-
-    private Finding Find(Person person, FunctionTest test, LocalDate date, Judgement judged) => new(
+    private Finding Find(Person person, FunctionTest test, LocalDate date, TestJudgement judged, double? cutOff, FunctionTestLimits limits) => new(
         person.Id,
         date,
         Name,
         Region: null,
-        Severity.Notice,
-        judged.Result.Date,
-        judged.Result.Value ?? 0,
-        judged.CutOff ?? judged.Error,
-        judged.Result.Value is null ? "not done" : test.Unit,
-        $"{test.Name}{(judged.Result.Value is { } value ? $" {Number(value)} {test.Unit}" : "")} on {Wording.Date(judged.Result.Date, date)}: {judged.Why}.",
-        new Evidence(
-            "the latest test of its kind (the better hand or try of its date) against a published cut-off, and against the one before",
-            "Cruz-Jentoft et al. 2019, Age Ageing 48:16-31; errors of the tests: from memory, a choice",
-            [
-                new("value", judged.Result.Value, test.Unit, $"on {Wording.IsoDate(judged.Result.Date)}"),
-                new("value_before", judged.Before?.Value, test.Unit, judged.Before is { } before ? $"on {Wording.IsoDate(before.Date)}" : null),
-                new("cut_off", judged.CutOff, test.Unit),
-                new("error", judged.Error > 0 ? judged.Error : null, test.Unit),
-            ]))
+        judged.Reason == TestReason.OtherConditions ? Severity.Note : limits.Severity.Severity(),
+        judged.Since,
+        judged.Result?.Value ?? 1,
+        judged.Limit ?? 1,
+        judged.Result is null ? "tests not done" : test.Unit,
+        $"{test.Name}{(judged.Result is { } result ? $" {Number(result.Value)} {test.Unit}" : "")} on {Wording.Date(judged.Date, date)}: {Why(test, judged, date)}.",
+        Basis(test, judged, cutOff, limits))
     {
         Quantity = test.Word,
     };
 
+    private static string Why(FunctionTest test, TestJudgement judged, LocalDate date) => judged switch
+    {
+        { Reason: TestReason.NotDone } => Ended(judged.Outcome),
+        { Reason: TestReason.CutOff, Result: { } result, Limit: { } limit } when test.IsBeyond(result.Value, limit) => $"{test.Words} the published cut-off of {Number(limit)} {test.Unit}",
+        { Reason: TestReason.CutOff, Limit: { } limit } => $"within the published cut-off of {Number(limit)} {test.Unit}, but by less than it takes to end what stood",
+        { Reason: TestReason.Fall, Before: { } before, Limit: { } limit } =>
+            $"{Number(before.Value)} {test.Unit} on {Wording.Date(before.Date, date)}, a change beyond the error of the test: the limit is {Number(limit)} {test.Unit}",
+        { Before: { } before, Result: { } result } =>
+            $"{Number(before.Value)} {test.Unit} on {Wording.Date(before.Date, date)}, but with {result.Conditions.DifferenceFrom(before.Conditions)}: not compared, so no alert",
+        _ => throw new ArgumentException("a judgement without what it rests on", nameof(judged)),
+    };
+
+    private static string Ended(TestOutcome? outcome) => outcome == TestOutcome.UsedArms ? "done with the arms" : "could not be done";
+
+    private static Evidence Basis(FunctionTest test, TestJudgement judged, double? cutOff, FunctionTestLimits limits) => new(
+        "the latest test of its kind (the better hand or try of its date) against a published cut-off, and against the latest one before with the same hand, device and chair height",
+        "Cruz-Jentoft et al. 2019, Age Ageing 48:16-31; errors of the tests: from memory, a choice",
+        [
+            new("value", judged.Result?.Value, test.Unit, judged.Result is { } result ? Told(result) : $"on {Wording.IsoDate(judged.Date)}, {Ended(judged.Outcome)}"),
+            new("value_before", judged.Before?.Value, test.Unit, judged.Before is { } before ? Told(before) : null),
+            new("cut_off", cutOff, test.Unit),
+            new("error", test.Error(limits), test.Unit),
+            new("return_share", limits.ReturnShare, "share"),
+            new("hold", limits.HoldDays, "days"),
+        ]);
+
+    private static string Told(TestResult result) => string.Join(
+        ", ",
+        new[]
+        {
+            $"on {Wording.IsoDate(result.Date)}",
+            result.Conditions.Hand is { } hand ? $"{hand} hand" : null,
+            result.Conditions.Device is { } device ? $"device {device}" : null,
+            result.Conditions.ChairCentimetres is { } height ? FormattableString.Invariant($"chair of {height} cm") : null,
+        }.OfType<string>());
+
     private static string Number(double value) => FormattableString.Invariant($"{value:0.##}");
-
-    private sealed record Result(LocalDate Date, double? Value, TestOutcome? Outcome);
-
-    private sealed record Judgement(Result Result, Result? Before, double? CutOff, double Error, string Why);
-
-    /// <summary>What was made of the latest test, and the latest that has a value.</summary>
-    private sealed record Known(Judgement? Judged, Result? Valued);
 }

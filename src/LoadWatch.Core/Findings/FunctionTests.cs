@@ -1,25 +1,34 @@
 // Cut-offs: Cruz-Jentoft et al. 2019, Age Ageing 48:16-31 (EWGSOP2). Grip below 27 kg (men), 16 kg (women); five chair stands in more than 15 s; gait speed
 // of 0.8 m/s or less; timed up and go of 20 s or more; short physical performance battery of 8 points or fewer; 400 m walk in 360 s or more or not completed.
-// The chair stand, the battery and the walk are from memory.
+// The chair stand, the battery and the walk are from memory. The numbers stand in FunctionTestLimits, the operators here.
 using LoadWatch.People;
 
 namespace LoadWatch.Findings;
 
-/// <summary>A function test: its word, how to name it, its unit, and the published cut-off.</summary>
+/// <summary>A function test: its word, how to name it, its unit, the published cut-off and the error of the test.</summary>
 /// <param name="Word">As tables write it.</param>
 /// <param name="Name">As sentences write it.</param>
 /// <param name="MoreIsBetter">False for times.</param>
 /// <param name="Limit">The cut-off in the unit; null without one for this person.</param>
 /// <param name="IsBeyond">Whether a value lies beyond a cut-off, by the operator of its source.</param>
 /// <param name="Words">The operator in words, before the cut-off.</param>
+/// <param name="Error">A change of more than this is more than the error of the test, in the unit; null where none is known: no fall is told.</param>
 public sealed record FunctionTest(
     string Word,
     string Name,
     string Unit,
     bool MoreIsBetter,
-    Func<Sex?, double?> Limit,
+    Func<FunctionTestLimits, Sex?, double?> Limit,
     Func<double, double, bool> IsBeyond,
-    string Words);
+    string Words,
+    Func<FunctionTestLimits, double?> Error)
+{
+    /// <summary>How much worse a value is than an earlier one, in the unit; negative where it is better.</summary>
+    public double Fall(double earlier, double value) => Significant.Round(MoreIsBetter ? earlier - value : value - earlier);
+
+    /// <summary>A value that is better by so much.</summary>
+    public double Better(double value, double by) => Significant.Round(MoreIsBetter ? value + by : value - by);
+}
 
 /// <summary>The function tests that LoadWatch knows.</summary>
 public static class FunctionTests
@@ -33,21 +42,29 @@ public static class FunctionTests
 
     public static IReadOnlyList<FunctionTest> All { get; } =
     [
-        new(Grip, "Grip strength", "kg", true, GripLimit, (value, limit) => value < limit, "below"),
-        new(ChairStands, "Five chair stands", "s", false, _ => 15, (value, limit) => value > limit, "above"),
-        new(Gait, "Gait speed", "m/s", true, _ => 0.8, (value, limit) => value <= limit, "at or below"),
-        new(UpAndGo, "Timed up and go", "s", false, _ => 20, (value, limit) => value >= limit, "at or above"),
-        new(PerformanceBattery, "Short physical performance battery", "points", true, _ => 8, (value, limit) => value <= limit, "at or below"),
-        new(Walk400, "400 m walk", "s", false, _ => 360, (value, limit) => value >= limit, "at or above"),
+        new(Grip, "Grip strength", "kg", true, GripLimit, (value, limit) => value < limit, "below", limits => limits.GripKilograms),
+        new(ChairStands, "Five chair stands", "s", false, (limits, _) => limits.ChairStandCutOffSeconds, (value, limit) => value > limit, "above", limits => limits.ChairStandSeconds),
+        new(Gait, "Gait speed", "m/s", true, (limits, _) => limits.GaitCutOffMetresPerSecond, (value, limit) => value <= limit, "at or below", limits => limits.GaitMetresPerSecond),
+        new(UpAndGo, "Timed up and go", "s", false, (limits, _) => limits.UpAndGoCutOffSeconds, (value, limit) => value >= limit, "at or above", limits => limits.UpAndGoSeconds),
+        new(
+            PerformanceBattery,
+            "Short physical performance battery",
+            "points",
+            true,
+            (limits, _) => limits.PerformanceBatteryCutOffPoints,
+            (value, limit) => value <= limit,
+            "at or below",
+            limits => limits.PerformanceBatteryPoints),
+        new(Walk400, "400 m walk", "s", false, (limits, _) => limits.Walk400CutOffSeconds, (value, limit) => value >= limit, "at or above", _ => null),
     ];
 
     public static FunctionTest? Of(string word) => All.FirstOrDefault(test => test.Word == word);
 
     /// <summary>By sex, as the source gives it; not stated: no cut-off.</summary>
-    private static double? GripLimit(Sex? sex) => sex switch
+    private static double? GripLimit(FunctionTestLimits limits, Sex? sex) => sex switch
     {
-        Sex.Male => 27,
-        Sex.Female => 16,
+        Sex.Male => limits.GripCutOffMenKilograms,
+        Sex.Female => limits.GripCutOffWomenKilograms,
         _ => null,
     };
 }

@@ -6,7 +6,8 @@ using NodaTime;
 namespace LoadWatch.Findings;
 
 /// <summary>
-/// Too many hard days in a row, or too many matches in a few days. The row ends with the first day that is known not to be hard; a day of unknown load, or one
+/// Too many hard days in a row, or too many matches in a few days. A row that is long enough ends with
+/// days that are known to be clearly easier; a day of unknown load, or one
 /// with too few training days before it, neither counts nor ends it (I-6). A match counts by plan or answers unless the person was absent or the day is known as
 /// rest; matches are read on known dates only.
 /// </summary>
@@ -14,7 +15,9 @@ public sealed class HardDaysRule : IRule
 {
     public string Name => "hard_days";
 
-    public bool IsEnabled(RuleLimits limits) => limits.HardDays.Enabled;
+    public RuleRecord Record { get; } = new HardDaysRecord();
+
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.HardDays;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
@@ -22,6 +25,7 @@ public sealed class HardDaysRule : IRule
         var before = subject.Memory.Before<Standing>(Name);
         var rows = new HardRows(limits, before?.Rows, before?.Row);
         var matches = new MatchDensity(limits, before?.Matches);
+        var faults = new SensorFaults(subject);
         var since = before?.Since;
         foreach (var day in subject.Days.Take(subject.First))
         {
@@ -31,10 +35,10 @@ public sealed class HardDaysRule : IRule
 
         foreach (var day in subject.Judged)
         {
-            rows.Pass(day);
+            rows.Pass(day, faults.MuteLoadOf(day.Date));
             matches.Pass(day);
             since = rows.Standing is null && matches.Standing is null ? null : since ?? day.Date;
-            subject.Memory.Keep(day.Date, Name, rows.Row is null && matches.State is null ? null : new Standing(since, rows.State, rows.Row, matches.State));
+            subject.Memory.Keep(day.Date, Name, rows.Row is null && rows.State is null && matches.State is null ? null : new Standing(since, rows.State, rows.Row, matches.State));
             if (since is { } start)
             {
                 yield return rows.Standing is { } row ? OfRow(subject, day.Date, start, row) : OfMatches(subject, day.Date, start, matches.Standing!);
@@ -58,7 +62,10 @@ public sealed class HardDaysRule : IRule
                 new("median_training_day", row.Median, subject.LoadUnit),
                 new("training_days", row.TrainingDays, "days", "that the median rests on"),
                 new("median_factor", limits.MedianFactor, "ratio"),
+                new("return_factor", limits.ReturnFactor, "ratio"),
                 new("days", limits.Days, "days"),
+                new("on_days", limits.OnDays, "days"),
+                new("off_days", limits.OffDays, "days"),
                 new("look_back", limits.LookBackDays, "days"),
                 new("training_days_wanted", limits.TrainingDaysWanted, "days"),
             ]));
@@ -74,12 +81,20 @@ public sealed class HardDaysRule : IRule
             [
                 new("matches", count.Matches, "count", $"up to {Wording.IsoDate(count.Date)}"),
                 new("matches_limit", limits.Matches, "count"),
+                new("matches_return", limits.MatchesReturn, "count"),
+                new("on_days", limits.OnDays, "days"),
+                new("off_days", limits.OffDays, "days"),
                 new("match_days", limits.MatchDays, "days"),
             ]));
     }
 
     private Finding Found(RuleSubject subject, LocalDate date, LocalDate since, double value, double limit, string unit, string text, Evidence evidence) =>
-        new(subject.Person.Id, date, Name, Region: null, Severity.Notice, since, value, limit, unit, text, evidence);
+        new(subject.Person.Id, date, Name, Region: null, subject.Limits.HardDays.Severity.Severity(), since, value, limit, unit, text, evidence);
+
+    /// <summary>What was carried of a day with the row that had not ended, and nothing that stands: as if the limit had not been passed yet.</summary>
+    internal Carried RowAlone(Carried carried) => carried.Run<Standing>(Name) is { Row: { } row }
+        ? new Carried { Runs = new Dictionary<string, object> { [Name] = new Standing(null, null, row, null) } }
+        : Carried.Nothing;
 
     private sealed record Standing(LocalDate? Since, RunState<HardRow>? Rows, HardRow? Row, RunState<MatchCount>? Matches) : IStanding;
 }

@@ -3,12 +3,15 @@ using NodaTime;
 
 namespace LoadWatch.Findings;
 
-/// <summary>Hard days in a row. Takes every day in order.</summary>
+/// <summary>
+/// Hard days in a row. Takes every day in order. Once the row was long enough, a day between the two factors neither counts nor ends it; what is told is the
+/// last row that was long enough.
+/// </summary>
 /// <param name="before">The run on the day before the first date.</param>
 /// <param name="rowBefore">The row that had not ended then, long enough or not.</param>
 internal sealed class HardRows(HardDaysLimits limits, RunState<HardRow>? before, HardRow? rowBefore)
 {
-    private readonly FindingRun<HardRow> run = new(onDays: 1, before);
+    private readonly FindingRun<HardRow> run = new(limits.OnDays, limits.OffDays, before);
     private readonly Queue<double?> window = [];
     private readonly RunningMedian training = new();
     private HardRow? row = rowBefore;
@@ -21,16 +24,17 @@ internal sealed class HardRows(HardDaysLimits limits, RunState<HardRow>? before,
 
     public RunState<HardRow>? State => run.State;
 
-    public void Pass(Day day)
+    /// <param name="muted">The load of the day rests on a sensor that failed: it counts as unknown.</param>
+    public void Pass(Day day, bool muted)
     {
         var median = training.Count >= limits.TrainingDaysWanted ? training.Value : null;
-        if (day.Load is { } load && median is { } usual)
+        if (day.Load is { } load && median is { } usual && !muted)
         {
             Count(day.Date, load, usual);
         }
         else
         {
-            row = Standing is null ? null : row! with { UnknownDays = row.UnknownDays + 1 };
+            row = Standing is not null && row is not null ? row with { UnknownDays = row.UnknownDays + 1 } : null;
         }
 
         Learn(day);
@@ -39,8 +43,10 @@ internal sealed class HardRows(HardDaysLimits limits, RunState<HardRow>? before,
     private void Count(LocalDate date, double load, double median)
     {
         var hard = load > Significant.Round(limits.MedianFactor * median);
-        row = hard ? new HardRow(date, (row?.Days ?? 0) + 1, row?.UnknownDays ?? 0, load, median, training.Count) : null;
-        run.Read(date, row ?? new HardRow(date, 0, 0, load, median, training.Count), row?.Days >= limits.Days, hard);
+        var between = Standing is not null && load > Significant.Round(Math.Min(limits.ReturnFactor, limits.MedianFactor) * median);
+        row = hard ? new HardRow(date, (row?.Days ?? 0) + 1, row?.UnknownDays ?? 0, load, median, training.Count) : between ? row : null;
+        var isLong = row?.Days >= limits.Days;
+        run.Read(date, isLong ? row! : Standing ?? new HardRow(date, 0, 0, load, median, training.Count), isLong, hard || between);
     }
 
     /// <summary>A day before the first date.</summary>

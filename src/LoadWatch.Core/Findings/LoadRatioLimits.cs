@@ -4,7 +4,7 @@ using System.Text.Json.Serialization;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>load_ratio</c>: acute load well above the usual, uncoupled.</summary>
-public sealed record LoadRatioLimits
+public sealed record LoadRatioLimits : IDelayedLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;
@@ -37,4 +37,15 @@ public sealed record LoadRatioLimits
     /// <summary>The chronic load must exceed this share of its own median over 12 months: no ratio over a near-empty month. A choice. 0 to 1.</summary>
     [Range(0.0, 1.0)]
     public double ChronicShareOfMedian { get; init; } = 0.4;
+
+    /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. A choice. Days.</summary>
+    [Range(1, 14)]
+    public int OnDays { get; init; } = 1;
+
+    /// <summary>Dates in a row, of those that can be read, on which it must be so no more before it is over. A choice. Days.</summary>
+    [Range(1, 14)]
+    public int OffDays { get; init; } = 1;
+
+    /// <summary>As what it is raised. A choice.</summary>
+    public RaisedAs Severity { get; init; } = RaisedAs.Warning;
 }

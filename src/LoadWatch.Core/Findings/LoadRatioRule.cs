@@ -3,6 +3,7 @@
 // the limit of 1.8 uncoupled is 1.5 coupled: C = 4 U / (U + 3). That a limit is watched at all, its value, coverage and return value are
 // a choice: the ratio describes change and nothing else.
 using LoadWatch.Days;
+using LoadWatch.Plans;
 using NodaTime;
 
 namespace LoadWatch.Findings;
@@ -19,7 +20,9 @@ public sealed class LoadRatioRule : IRule
 
     public string Name => "load_ratio";
 
-    public bool IsEnabled(RuleLimits limits) => limits.LoadRatio.Enabled;
+    public RuleRecord Record { get; } = new LoadRatioRecord();
+
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.LoadRatio;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) => WatchedSeries.Of(subject, subject.Limits.LoadRatio.Quantities)
         .SelectMany(series => Evaluate(subject, series, subject.Limits.LoadRatio))
@@ -28,14 +31,11 @@ public sealed class LoadRatioRule : IRule
     private IEnumerable<Finding> Evaluate(RuleSubject subject, WatchedSeries series, LoadRatioLimits limits)
     {
         var key = series.KeyOf(this);
-        var run = new FindingRun<Ratio>(onDays: 1, subject.Memory.Before<RunState<Ratio>>(key));
+        var run = new FindingRun<Ratio>(limits.OnDays, limits.OffDays, subject.Memory.Before<RunState<Ratio>>(key));
         foreach (var day in series.Days.Skip(subject.First))
         {
-            if (day.Plan.IsAwayOrReturning())
-            {
-                run.End();
-            }
-            else if (IsKnown(day, limits))
+            run.Watch(PlanMutes.Of(Name, day.Plan), day.Date);
+            if (IsKnown(day, limits))
             {
                 run.Read(day.Date, Ratio.Of(day), Raises(day, limits), day.RatioUncoupled >= Math.Min(limits.Return, limits.Raise));
             }
@@ -43,7 +43,7 @@ public sealed class LoadRatioRule : IRule
             subject.Memory.Keep(day.Date, key, run.State);
             if (run is { Since: { } since, Reading: { } read })
             {
-                yield return Find(series, day.Date, since, read, limits);
+                yield return Find(series, day.Date, since, read, limits).Unless(run.Muted);
             }
         }
     }
@@ -63,7 +63,7 @@ public sealed class LoadRatioRule : IRule
         date,
         Name,
         Region: null,
-        Severity.Warning,
+        limits.Severity.Severity(),
         since,
         read.RatioUncoupled,
         limits.Raise,
@@ -104,6 +104,8 @@ public sealed class LoadRatioRule : IRule
             new("days_since_first_covered", read.DaysSinceFirstCovered, "days"),
             new("raise", limits.Raise, "ratio"),
             new("return", limits.Return, "ratio"),
+            new("on_days", limits.OnDays, "days"),
+            new("off_days", limits.OffDays, "days"),
             new("history_wanted", limits.HistoryDays, "days"),
             new("covered_of_7_wanted", limits.CoveredOf7, "days"),
             new("covered_of_28_wanted", limits.CoveredOf28, "days"),

@@ -3,11 +3,11 @@ using NodaTime;
 
 namespace LoadWatch.Findings;
 
-/// <summary>Matches close together. Takes every day in order.</summary>
+/// <summary>Matches close together. Takes every day in order. What is told are the matches as they last lay too close.</summary>
 /// <param name="before">The run on the day before the first date.</param>
 internal sealed class MatchDensity(HardDaysLimits limits, RunState<MatchCount>? before)
 {
-    private readonly FindingRun<MatchCount> run = new(onDays: 1, before);
+    private readonly FindingRun<MatchCount> run = new(limits.OnDays, limits.OffDays, before);
     private readonly Queue<LocalDate> matches = [];
 
     /// <summary>Null where there are not too many.</summary>
@@ -35,7 +35,8 @@ internal sealed class MatchDensity(HardDaysLimits limits, RunState<MatchCount>? 
         if (day.State != DayState.Unknown)
         {
             var many = matches.Count >= limits.Matches;
-            run.Read(day.Date, new MatchCount(day.Date, matches.Count, matches.LastOrDefault()), many, many);
+            var told = many || Standing is null ? new MatchCount(day.Date, matches.Count, matches.LastOrDefault()) : Standing;
+            run.Read(day.Date, told, many, matches.Count > Math.Min(limits.MatchesReturn, limits.Matches - 1));
         }
     }
 }

@@ -3,7 +3,7 @@ using System.ComponentModel.DataAnnotations;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>monotony</c>: a heavy week without variation.</summary>
-public sealed record MonotonyLimits
+public sealed record MonotonyLimits : IDelayedLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;
@@ -27,4 +27,15 @@ public sealed record MonotonyLimits
     /// <summary>How far back strains are looked at. A choice. Days.</summary>
     [Range(60, 400)]
     public int LookBackDays { get; init; } = 365;
+
+    /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. A choice. Days.</summary>
+    [Range(1, 14)]
+    public int OnDays { get; init; } = 1;
+
+    /// <summary>Dates in a row, of those that can be read, on which it must be so no more before it is over. A choice. Days.</summary>
+    [Range(1, 14)]
+    public int OffDays { get; init; } = 1;
+
+    /// <summary>As what it is raised. A choice.</summary>
+    public RaisedAs Severity { get; init; } = RaisedAs.Notice;
 }

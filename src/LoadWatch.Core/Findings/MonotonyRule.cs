@@ -8,22 +8,28 @@ namespace LoadWatch.Findings;
 
 /// <summary>
 /// A heavy week without variation. Raised above the limit of monotony when the week is also above the usual and the strain above the quantile of the person's own
-/// strains of the days before; over when monotony falls below the return value or the week is no heavier than the usual. One unknown day of the 7 leaves it as it
-/// was (I-6); so do seven equal loads, which have no monotony.
+/// strains of the days before; over when monotony falls below the return value or the week is no heavier than the usual. One unknown day of the 7, or one whose load rests on a
+/// faulty sensor, leaves it as it was (I-6); so do seven equal loads, which have no monotony.
 /// </summary>
 public sealed class MonotonyRule : IRule
 {
+    private const int WeekDays = 7;
+
     public string Name => "monotony";
 
-    public bool IsEnabled(RuleLimits limits) => limits.Monotony.Enabled;
+    public RuleRecord Record { get; } = new MonotonyRecord();
+
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.Monotony;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var (days, limits) = (subject.Days, subject.Limits.Monotony);
-        var run = new FindingRun<EvenWeek>(onDays: 1, subject.Memory.Before<RunState<EvenWeek>>(Name));
+        var run = new FindingRun<EvenWeek>(limits.OnDays, limits.OffDays, subject.Memory.Before<RunState<EvenWeek>>(Name));
+        var faults = new SensorFaults(subject);
         for (var index = subject.First; index < days.Count; index++)
         {
-            if (Read(days, index, limits) is { } week)
+            run.Watch(PlanMutes.Of(Name, days[index].Plan), days[index].Date);
+            if (!WeekIsMuted(faults, days[index].Date) && Read(days, index, limits) is { } week)
             {
                 run.Read(week.Date, week, Raises(week, limits), Holds(week, limits));
             }
@@ -31,10 +37,12 @@ public sealed class MonotonyRule : IRule
             subject.Memory.Keep(days[index].Date, Name, run.State);
             if (run is { Since: { } since, Reading: { } read })
             {
-                yield return Find(subject, days[index].Date, since, read, limits);
+                yield return Find(subject, days[index].Date, since, read, limits).Unless(run.Muted);
             }
         }
     }
+
+    private static bool WeekIsMuted(SensorFaults faults, LocalDate date) => Enumerable.Range(0, WeekDays).Any(back => faults.MuteLoadOf(date.PlusDays(-back)));
 
     private static EvenWeek? Read(IReadOnlyList<Day> days, int index, MonotonyLimits limits) =>
         days[index] is { Monotony: { } monotony, Strain: { } strain, Acute: { } acute, ChronicBefore: { } usual } day
@@ -52,7 +60,7 @@ public sealed class MonotonyRule : IRule
         date,
         Name,
         Region: null,
-        Severity.Notice,
+        limits.Severity.Severity(),
         since,
         read.Monotony,
         limits.Raise,
@@ -83,6 +91,8 @@ public sealed class MonotonyRule : IRule
             new("strains", read.Own?.Count, "days"),
             new("raise", limits.Raise, "ratio"),
             new("return", limits.Return, "ratio"),
+            new("on_days", limits.OnDays, "days"),
+            new("off_days", limits.OffDays, "days"),
             new("strain_quantile", limits.StrainQuantile, "share"),
             new("strains_wanted", limits.StrainsWanted, "days"),
             new("look_back", limits.LookBackDays, "days"),

@@ -41,6 +41,9 @@ public sealed record RuleLimits
     /// <summary>Function tests beyond a published cut-off or down by more than their error.</summary>
     public FunctionTestLimits FunctionTest { get; init; } = new();
 
+    /// <summary>Function tests that were not done again in time.</summary>
+    public TestOverdueLimits TestOverdue { get; init; } = new();
+
     /// <summary>Every quantity that some rule in force watches beside the group's load, each once, in ordinal order.</summary>
     [JsonIgnore]
     public IReadOnlyList<string> Quantities =>

@@ -1,4 +1,5 @@
 using LoadWatch.Activities;
+using LoadWatch.Days;
 using LoadWatch.Loads;
 using NodaTime;
 
@@ -9,6 +10,7 @@ internal sealed class SessionSizes(RuleSubject subject)
 {
     private readonly SessionSpikeLimits limits = subject.Limits.SessionSpike;
     private readonly List<JoinedActivity> sessions = [.. subject.Activities.Where(activity => activity.AddsLoad)];
+    private readonly SensorFaults faults = new(subject);
 
     /// <summary>The sessions of a date that lie beyond the largest before.</summary>
     public IEnumerable<SessionSpike> Spikes(LocalDate date)
@@ -40,12 +42,12 @@ internal sealed class SessionSizes(RuleSubject subject)
         return excess < notice ? null : new SessionSpike(date, ofRun, value, largest.Value, largest.Date, before.Count, excess, severity);
     }
 
-    private static double? Run(JoinedActivity session) => session.Sport.Name == "running" ? Positive(session[QuantityNames.Distance]) : null;
+    private static double? Run(JoinedActivity session) => SessionSize.Run(session.Sport, session[QuantityNames.Distance]);
 
-    private double? Load(JoinedActivity session) =>
-        Positive(subject.SessionLoads is { } loads ? loads.GetValueOrDefault(session.Key) : session[subject.LoadQuantity]);
-
-    private static double? Positive(double? value) => value > 0 ? value : null;
+    /// <summary>Null as well where it was read from a sensor that failed.</summary>
+    private double? Load(JoinedActivity session) => faults.Mutes(session, subject.LoadQuantity)
+        ? null
+        : SessionSize.Load(subject.SessionLoads is { } loads ? loads.GetValueOrDefault(session.Key) : session[subject.LoadQuantity]);
 
     private static List<Size> Sizes(List<JoinedActivity> before, Func<JoinedActivity, double?> of) =>
         [.. before.Where(session => of(session).HasValue).Select(session => new Size(session.Date, of(session)!.Value))];

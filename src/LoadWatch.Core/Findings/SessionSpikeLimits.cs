@@ -3,7 +3,7 @@ using System.ComponentModel.DataAnnotations;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>session_spike</c>: one session far beyond the longest of the days before.</summary>
-public sealed record SessionSpikeLimits
+public sealed record SessionSpikeLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;

@@ -16,7 +16,9 @@ public sealed class SessionSpikeRule : IRule
 
     private string KeyOfRuns => $"{Name}/{QuantityNames.Distance}";
 
-    public bool IsEnabled(RuleLimits limits) => limits.SessionSpike.Enabled;
+    public RuleRecord Record { get; } = new SessionSpikeRecord();
+
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.SessionSpike;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {

@@ -3,7 +3,7 @@ using System.ComponentModel.DataAnnotations;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>silence</c>: expected recordings did not come, by the rhythm of the person's own recordings. All a choice.</summary>
-public sealed record SilenceLimits
+public sealed record SilenceLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;
@@ -35,4 +35,7 @@ public sealed record SilenceLimits
     /// <summary>Longer than this is silence whatever the person's own gaps were. Days.</summary>
     [Range(7, 400)]
     public int CeilingDays { get; init; } = 42;
+
+    /// <summary>As what it is raised. A choice.</summary>
+    public RaisedAs Severity { get; init; } = RaisedAs.Notice;
 }

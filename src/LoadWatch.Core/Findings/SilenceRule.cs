@@ -13,7 +13,9 @@ public sealed class SilenceRule : IRule
 {
     public string Name => "silence";
 
-    public bool IsEnabled(RuleLimits limits) => limits.Silence.Enabled;
+    public RuleRecord Record { get; } = new SilenceRecord();
+
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.Silence;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
@@ -63,7 +65,7 @@ public sealed class SilenceRule : IRule
         day.Date,
         Name,
         Region: null,
-        Severity.Notice,
+        limits.Severity.Severity(),
         day.Date.PlusDays(rhythm.LimitDays + 1 - silent),
         silent,
         rhythm.LimitDays,
@@ -76,7 +78,7 @@ public sealed class SilenceRule : IRule
         day.Date,
         Name,
         Region: null,
-        Severity.Notice,
+        limits.Severity.Severity(),
         planned.First[limits.PlannedMissed - 1].PlusDays(limits.PlannedWaitDays),
         planned.Missed,
         limits.PlannedMissed,

@@ -1,12 +1,18 @@
 using System.ComponentModel.DataAnnotations;
+using LoadWatch.Stimulus;
 
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>stimulus_gap</c>: too long without heavy or fast work of a body region. All a choice.</summary>
-public sealed record StimulusGapLimits
+public sealed record StimulusGapLimits : IRuleLimits
 {
+    private static readonly IReadOnlyList<BodyRegion> LegsOnly = [BodyRegion.Legs];
+
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;
+
+    /// <summary>Body regions that are watched: legs, trunk, arms.</summary>
+    public IReadOnlyList<BodyRegion> Regions { get; init; } = LegsOnly;
 
     /// <summary>Days without heavy or fast work that raise a notice. Days.</summary>
     [Range(2, 120)]

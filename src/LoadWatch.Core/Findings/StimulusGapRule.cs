@@ -2,37 +2,35 @@
 using LoadWatch.Days;
 using LoadWatch.People;
 using LoadWatch.Stimulus;
+using LoadWatch.Plans;
 using NodaTime;
 
 namespace LoadWatch.Findings;
 
 /// <summary>
-/// Too long without heavy or fast work of a region, legs first. Only a heavy-or-fast day ends it. A day on which nothing is known, or a gap
+/// Too long without heavy or fast work of a region that is watched, the legs unless the limits say otherwise. Only a heavy-or-fast day ends it. A day on which nothing is known, or a gap
 /// that is known too sparsely, neither raises nor worsens nor clears it: the last known state stands (I-6). Off in absence and return: nobody is sent to heavy work
 /// in the first days back.
 /// </summary>
 public sealed class StimulusGapRule : IRule
 {
-    private static readonly BodyRegion[] Regions = [BodyRegion.Legs];
-
     public string Name => "stimulus_gap";
 
-    public bool IsEnabled(RuleLimits limits) => limits.StimulusGap.Enabled;
+    public RuleRecord Record { get; } = new StimulusGapRecord();
+
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.StimulusGap;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) =>
-        Regions.SelectMany(region => Evaluate(subject, region, subject.Limits.StimulusGap)).OrderBy(finding => finding.Date);
+        subject.Limits.StimulusGap.Regions.Distinct().Order().SelectMany(region => Evaluate(subject, region, subject.Limits.StimulusGap)).OrderBy(finding => finding.Date);
 
     private IEnumerable<Finding> Evaluate(RuleSubject subject, BodyRegion region, StimulusGapLimits limits)
     {
         var key = $"{Name}/{BodyRegions.Word(region)}";
-        var run = new FindingRun<Gap>(onDays: 1, subject.Memory.Before<RunState<Gap>>(key));
+        var run = new FindingRun<Gap>(onDays: 1, offDays: 1, subject.Memory.Before<RunState<Gap>>(key));
         foreach (var day in subject.Judged)
         {
-            if (day.Plan.IsAwayOrReturning())
-            {
-                run.End();
-            }
-            else if (Read(subject.Person, region, day, limits) is { } gap)
+            run.Watch(PlanMutes.Of(Name, day.Plan), day.Date);
+            if (Read(subject.Person, region, day, limits) is { } gap)
             {
                 run.Read(day.Date, gap, gap.Days > 0 && gap.Days >= gap.Limit.NoticeDays, gap.Days > 0);
             }
@@ -40,7 +38,7 @@ public sealed class StimulusGapRule : IRule
             subject.Memory.Keep(day.Date, key, run.State);
             if (run is { Since: { } since, Reading: { } read })
             {
-                yield return Find(subject.Person, day.Date, region, since, read, limits);
+                yield return Find(subject.Person, day.Date, region, since, read, limits).Unless(run.Muted);
             }
         }
     }

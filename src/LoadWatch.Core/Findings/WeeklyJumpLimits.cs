@@ -4,7 +4,7 @@ using System.Text.Json.Serialization;
 namespace LoadWatch.Findings;
 
 /// <summary>Limits of the rule <c>weekly_jump</c>: this week far above the last ordinary one. All a choice.</summary>
-public sealed record WeeklyJumpLimits
+public sealed record WeeklyJumpLimits : IDelayedLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
     public bool Enabled { get; init; } = true;
@@ -37,7 +37,14 @@ public sealed record WeeklyJumpLimits
     [JsonPropertyName("covered_of_7")]
     public int CoveredOf7 { get; init; } = 5;
 
-    /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. Days.</summary>
-    [Range(1, 7)]
+    /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. A choice. Days.</summary>
+    [Range(1, 14)]
     public int OnDays { get; init; } = 2;
+
+    /// <summary>Dates in a row, of those that can be read, on which it must be so no more before it is over. A choice. Days.</summary>
+    [Range(1, 14)]
+    public int OffDays { get; init; } = 1;
+
+    /// <summary>As what it is raised. A choice.</summary>
+    public RaisedAs Severity { get; init; } = RaisedAs.Notice;
 }

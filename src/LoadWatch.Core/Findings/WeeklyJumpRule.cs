@@ -4,6 +4,7 @@
 // Departure from the plain change of a week: a light week, the off-season, travel, an absence, a return and a week without any load are stepped over, so that
 // a usual week after one of them is no jump; a week of which too little is known is not.
 using LoadWatch.Days;
+using LoadWatch.Plans;
 using NodaTime;
 
 namespace LoadWatch.Findings;
@@ -18,7 +19,9 @@ public sealed class WeeklyJumpRule : IRule
 
     public string Name => "weekly_jump";
 
-    public bool IsEnabled(RuleLimits limits) => limits.WeeklyJump.Enabled;
+    public RuleRecord Record { get; } = new WeeklyJumpRecord();
+
+    public IRuleLimits LimitsOf(RuleLimits limits) => limits.WeeklyJump;
 
     public IEnumerable<Finding> Evaluate(RuleSubject subject) => WatchedSeries.Of(subject, subject.Limits.WeeklyJump.Quantities)
         .SelectMany(series => Evaluate(subject, series, subject.Limits.WeeklyJump))
@@ -27,15 +30,12 @@ public sealed class WeeklyJumpRule : IRule
     private IEnumerable<Finding> Evaluate(RuleSubject subject, WatchedSeries series, WeeklyJumpLimits limits)
     {
         var key = series.KeyOf(this);
-        var run = new FindingRun<Jump>(limits.OnDays, subject.Memory.Before<RunState<Jump>>(key));
+        var run = new FindingRun<Jump>(limits.OnDays, limits.OffDays, subject.Memory.Before<RunState<Jump>>(key));
         for (var index = subject.First; index < series.Days.Count; index++)
         {
             var day = series.Days[index];
-            if (day.Plan.IsAwayOrReturning())
-            {
-                run.End();
-            }
-            else if (Read(series.Days, index, limits) is { } jump)
+            run.Watch(PlanMutes.Of(Name, day.Plan), day.Date);
+            if (Read(series.Days, index, limits) is { } jump)
             {
                 run.Read(day.Date, jump, Raises(jump, limits), jump.Change >= Math.Min(limits.Return, limits.Raise));
             }
@@ -43,7 +43,7 @@ public sealed class WeeklyJumpRule : IRule
             subject.Memory.Keep(day.Date, key, run.State);
             if (run is { Since: { } since, Reading: { } read })
             {
-                yield return Find(series, day.Date, since, read, limits);
+                yield return Find(series, day.Date, since, read, limits).Unless(run.Muted);
             }
         }
     }
@@ -51,17 +51,10 @@ public sealed class WeeklyJumpRule : IRule
     private static Jump? Read(IReadOnlyList<Day> days, int index, WeeklyJumpLimits limits)
     {
         var acute = PastWeek.Before(days, index, 1, limits.CoveredOf7).Single().Load;
-        var weeks = PastWeek.Before(days, index - WeekDays, limits.LookBackWeeks, limits.CoveredOf7);
-        var before = weeks.FirstOrDefault(week => !week.IsSkipped);
-        if (days[index].Load is null || acute is null || before.Load is not { } load)
-        {
-            return null;
-        }
-
-        var ordinary = weeks.Where(week => week.IsOrdinary).Take(limits.Weeks).ToList();
-        return ordinary.Count < limits.Weeks
-            ? null
-            : new Jump(days[index].Date, acute.Value, before.UpTo, load, PastWeek.Median(ordinary)!.Value, Significant.Round((acute.Value - load) / load));
+        var weeks = PastWeek.Before(days, index - WeekDays, limits.LookBackWeeks, limits.CoveredOf7).ToList();
+        return days[index].Load is not null && WeekChange.Of(acute, weeks) is { } change && UsualWeek.Of(weeks, limits.Weeks, limits.Weeks) is { } usual
+            ? new Jump(days[index].Date, change.Acute, change.BeforeUpTo, change.Before, usual.Load, change.Fraction)
+            : null;
     }
 
     private static bool Raises(Jump jump, WeeklyJumpLimits limits) =>
@@ -72,7 +65,7 @@ public sealed class WeeklyJumpRule : IRule
         date,
         Name,
         Region: null,
-        Severity.Notice,
+        limits.Severity.Severity(),
         since,
         read.Change,
         limits.Raise,
@@ -111,6 +104,7 @@ public sealed class WeeklyJumpRule : IRule
             new("look_back", limits.LookBackWeeks, "weeks"),
             new("covered_of_7_wanted", limits.CoveredOf7, "days"),
             new("on_days", limits.OnDays, "days"),
+            new("off_days", limits.OffDays, "days"),
         ]);
 
     /// <summary>What a date shows; loads in the series' unit.</summary>

@@ -29,9 +29,10 @@ public static class Accelerations
 
         var heldWanted = MostAreWithin(FastStepMilliseconds, speed) ? 500 : 1000;
         var (rises, falls, held) = (new Tally(heldWanted), new Tally(heldWanted), speed.Held());
+        var seconds = Seconds(held.UnixMilliseconds);
         for (var at = 0; at < held.Count; at++)
         {
-            var slope = Slope(held.UnixMilliseconds, held.Values, at);
+            var slope = Slope(held.UnixMilliseconds, seconds, held.Values, at);
             rises.Add(slope, held.Milliseconds[at]);
             falls.Add(-slope, held.Milliseconds[at]);
         }
@@ -52,23 +53,28 @@ public static class Accelerations
         return within > steps / 2;
     }
 
-    /// <summary>Metres per second squared, rounded so that 2.5 held as 2.4999999 counts; null where too few readings are near.</summary>
-    private static double? Slope(ReadOnlySpan<long> times, ReadOnlySpan<double> speeds, int at)
+    /// <summary>Since the first reading.</summary>
+    private static double[] Seconds(ReadOnlySpan<long> times)
     {
-        var (count, t, v, tt, tv) = (0, 0.0, 0.0, 0.0, 0.0);
-        for (var near = FirstNear(times, at); near < times.Length && (near <= at || AreNear(times[at], times[near])); near++)
+        var seconds = new double[times.Length];
+        for (var at = 0; at < times.Length; at++)
         {
-            var seconds = (times[near] - times[at]) / 1000.0;
-            var speed = speeds[near];
-            count++;
-            t += seconds;
-            v += speed;
-            tt += seconds * seconds;
-            tv += seconds * speed;
+            seconds[at] = unchecked((ulong)(times[at] - times[0])) / 1000.0;
         }
 
-        var spread = (count * tt) - (t * t);
-        return count >= 3 && spread > 0 ? Math.Round(((count * tv) - (t * v)) / spread, 6) : null;
+        return seconds;
+    }
+
+    /// <summary>Metres per second squared, rounded so that 2.5 held as 2.4999999 counts; null where too few readings are near.</summary>
+    private static double? Slope(ReadOnlySpan<long> times, ReadOnlySpan<double> seconds, ReadOnlySpan<double> speeds, int at)
+    {
+        var (first, end) = (FirstNear(times, at), at + 1);
+        while (end < times.Length && AreNear(times[at], times[end]))
+        {
+            end++;
+        }
+
+        return end - first >= 3 && LeastSquares.SlopeOf(seconds[first..end], speeds[first..end]) is { } slope ? Math.Round(slope, 6) : null;
     }
 
     private static int FirstNear(ReadOnlySpan<long> times, int at)

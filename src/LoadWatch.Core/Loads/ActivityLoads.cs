@@ -20,7 +20,7 @@ public sealed record ActivityLoads(
         var ofSpeed = SpeedLoads.OfSamples(usable);
         var top = SessionLoads.Find(ofSpeed, QuantityNames.SpeedTop)?.Value;
         var ofHistograms = HistogramLoads.Of(usable.Histograms, usable.Recording.Sport, top, date, person, anchors, settings);
-        var (ofSets, remark) = SetTotals.Of(usable.Recording.Sets);
+        var (ofSets, remark) = SetTotals.Of(usable.Recording.Sets, settings.Equations.OneRepetitionMaxByRepetitions);
         IEnumerable<Quantity> quantities = [.. ofHistograms.Quantities, .. ExternalLoads.Of(usable), .. ofSpeed, .. ofSets];
         return new ActivityLoads(
             [.. quantities.OrderBy(quantity => quantity.Name, StringComparer.Ordinal)],

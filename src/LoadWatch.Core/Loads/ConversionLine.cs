@@ -3,8 +3,7 @@ using NodaTime;
 namespace LoadWatch.Loads;
 
 /// <summary>
-/// A person's own line from one quantity to another, y = a + b x, by ordinary least squares (textbook; no source needed).
-/// b = Sxy / Sxx, a = y' - b x' with the means x' and y'; standard error of estimate = sqrt(sum of (y - a - b x)^2 / (n - 2)).
+/// A person's own line from one quantity to another, y = a + b x (<see cref="LeastSquares"/>).
 /// </summary>
 /// <param name="Wanted">Name of y.</param>
 /// <param name="From">Name of x.</param>

@@ -17,7 +17,7 @@ public static class HeartRateLoads
     /// <param name="heartRate">Milliseconds by whole bpm; null where heart rate was not recorded or is not usable: then nothing is told.</param>
     /// <param name="date">The local date of the session: anchors are taken as they hold on it.</param>
     public static (IReadOnlyList<Quantity> Quantities, IReadOnlyList<string> Remarks) Of(
-        Histogram? heartRate, LocalDate date, Person person, AnchorBook anchors)
+        Histogram? heartRate, LocalDate date, Person person, AnchorBook anchors, EquationChoices equations)
     {
         if (heartRate is null)
         {
@@ -28,35 +28,35 @@ public static class HeartRateLoads
         var (own, missingOfPair) = TrimpPair.On(date, person, anchors);
         IEnumerable<Quantity?> quantities =
         [
-            .. OfReserve(heartRate, reserve, own, person.Sex),
-            .. OfMaximum(heartRate, HeartRateMaximum.On(date, person, anchors)),
+            .. OfReserve(heartRate, reserve, own, person.Sex, equations),
+            .. OfMaximum(heartRate, HeartRateMaximum.On(date, person, anchors), equations),
             HeartRateThresholds.On(date, person, anchors) is { } thresholds
-                ? Load(QuantityNames.LuciaLoad, LuciaLoad.Of(heartRate, thresholds), thresholds.Estimated)
+                ? Load(QuantityNames.LuciaLoad, LuciaLoad.Of(heartRate, thresholds, equations.LuciaWeights), thresholds.Estimated)
                 : null,
         ];
         return ([.. quantities.OfType<Quantity>()], [.. new[] { missing, missingOfPair }.OfType<string>()]);
     }
 
-    private static IEnumerable<Quantity?> OfReserve(Histogram heartRate, HeartRateReserve? reserve, TrimpPair? own, Sex? sex)
+    private static IEnumerable<Quantity?> OfReserve(Histogram heartRate, HeartRateReserve? reserve, TrimpPair? own, Sex? sex, EquationChoices equations)
     {
         if (reserve is null)
         {
             yield break;
         }
 
-        yield return Load(QuantityNames.BanisterTrimp, BanisterTrimp.Of(heartRate, reserve, sex), reserve.Estimated || sex is null);
+        yield return Load(QuantityNames.BanisterTrimp, BanisterTrimp.Of(heartRate, reserve, sex, equations), reserve.Estimated || sex is null);
         if (own is not null)
         {
             yield return Load(QuantityNames.IndividualTrimp, IndividualTrimp.Of(heartRate, reserve, own), reserve.Estimated || own.Estimated);
         }
     }
 
-    private static IEnumerable<Quantity?> OfMaximum(Histogram heartRate, HeartRateMaximum? max)
+    private static IEnumerable<Quantity?> OfMaximum(Histogram heartRate, HeartRateMaximum? max, EquationChoices equations)
     {
         if (max is { Bpm: > 0 })
         {
-            yield return Load(QuantityNames.EdwardsLoad, EdwardsLoad.Of(heartRate, max.Bpm), max.Estimated);
-            yield return Load(QuantityNames.StagnoLoad, StagnoLoad.Of(heartRate, max.Bpm), max.Estimated);
+            yield return Load(QuantityNames.EdwardsLoad, EdwardsLoad.Of(heartRate, max.Bpm, equations.EdwardsWeights), max.Estimated);
+            yield return Load(QuantityNames.StagnoLoad, StagnoLoad.Of(heartRate, max.Bpm, equations), max.Estimated);
         }
     }
 

@@ -8,7 +8,7 @@ namespace LoadWatch.Loads;
 /// <param name="Estimated">True when it comes from an equation.</param>
 public sealed record HeartRateMaximum(double Bpm, bool Estimated)
 {
-    /// <summary>The anchored maximum, else Tanaka's from the birth year, else null.</summary>
+    /// <summary>The anchored maximum, else one by age (<see cref="AnchorBook.HeartRateMaxEquation"/>), else null.</summary>
     public static HeartRateMaximum? On(LocalDate date, Person person, AnchorBook anchors)
     {
         if (anchors.On(date, person.Id, AnchorKind.HeartRateMax) is { } anchor)
@@ -16,6 +16,6 @@ public sealed record HeartRateMaximum(double Bpm, bool Estimated)
             return new HeartRateMaximum(anchor.Value, anchor.Source == AnchorSource.Estimated);
         }
 
-        return person.AgeOn(date) is { } age && TanakaHeartRateMax.Of(age) is { } bpm ? new HeartRateMaximum(bpm, Estimated: true) : null;
+        return person.AgeOn(date) is { } age && anchors.HeartRateMaxEquation.BpmAt(age, person.Sex) is { } bpm ? new HeartRateMaximum(bpm, Estimated: true) : null;
     }
 }

@@ -26,7 +26,7 @@ public sealed record HistogramLoads(IReadOnlyList<Quantity> Quantities, IReadOnl
         AnchorBook anchors,
         ComputationSettings settings)
     {
-        var (ofHeartRate, remarks) = HeartRateLoads.Of(histograms.GetValueOrDefault(Channel.HeartRate), date, person, anchors);
+        var (ofHeartRate, remarks) = HeartRateLoads.Of(histograms.GetValueOrDefault(Channel.HeartRate), date, person, anchors, settings.Equations);
         var ofSpeed = SpeedLoads.OfHistogram(
             histograms.GetValueOrDefault(Channel.Speed), sport, speedTop, anchors.On(date, person.Id, AnchorKind.SpeedMax), settings);
         return new HistogramLoads([.. ofHeartRate, .. ofSpeed], [.. Zones(histograms, sport, date, person, anchors, settings)], remarks);
@@ -47,7 +47,7 @@ public sealed record HistogramLoads(IReadOnlyList<Quantity> Quantities, IReadOnl
 
         if (!sport.IsOnFoot
             && histograms.TryGetValue(Channel.Power, out var power)
-            && anchors.On(date, person.Id, AnchorKind.CriticalPower) is { } criticalPower)
+            && anchors.On(date, person.Id, AnchorKind.CriticalPower, sport) is { } criticalPower)
         {
             yield return ZoneTimes.OfPower(power, criticalPower, settings.PowerBounds);
         }

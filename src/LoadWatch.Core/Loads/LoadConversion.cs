@@ -28,73 +28,22 @@ public static class LoadConversion
         var before = FirstOfMonth(date);
         var since = before.PlusMonths(-Months);
         var within = pairs.Between(since, before);
-        if (within.Length < FewestPairs || LeastSquares(within) is not var (intercept, slope, standardError))
-        {
-            return null;
-        }
-
-        return new ConversionLine(wanted, from, intercept, slope, standardError, within.Length, since, before);
+        return within.Length < FewestPairs || Line(within) is not { StandardError: { } error, Slope: > 0 } line
+            ? null
+            : new ConversionLine(
+                wanted, from, Significant.Round(line.Intercept), Significant.Round(line.Slope), Significant.Round(error), within.Length, since, before);
     }
 
     internal static LocalDate FirstOfMonth(LocalDate date) => date.PlusDays(1 - date.Day);
 
-    private static (double Intercept, double Slope, double StandardError)? LeastSquares(ReadOnlySpan<LoadPairs.Pair> pairs)
+    private static LeastSquares? Line(ReadOnlySpan<LoadPairs.Pair> pairs)
     {
-        var (meanX, meanY) = Means(pairs);
-        var (sxx, sxy) = (0.0, 0.0);
-        foreach (var (_, x, y) in pairs)
+        var (x, y) = (new double[pairs.Length], new double[pairs.Length]);
+        for (var at = 0; at < pairs.Length; at++)
         {
-            sxx += (x - meanX) * (x - meanX);
-            sxy += (x - meanX) * (y - meanY);
+            (x[at], y[at]) = (pairs[at].X, pairs[at].Y);
         }
 
-        var slope = sxy / sxx;
-        var intercept = meanY - (slope * meanX);
-        if (!Varies(pairs) || !(slope > 0) || !double.IsFinite(intercept))
-        {
-            return null;
-        }
-
-        var standardError = StandardError(pairs, intercept, slope);
-        return double.IsFinite(standardError)
-            ? (Significant.Round(intercept), Significant.Round(slope), Significant.Round(standardError))
-            : null;
-    }
-
-    private static (double X, double Y) Means(ReadOnlySpan<LoadPairs.Pair> pairs)
-    {
-        var (x, y) = (0.0, 0.0);
-        foreach (var pair in pairs)
-        {
-            (x, y) = (x + pair.X, y + pair.Y);
-        }
-
-        return (x / pairs.Length, y / pairs.Length);
-    }
-
-    /// <summary>Asked of the values themselves: a mean of equal values may differ from them in its last digit.</summary>
-    private static bool Varies(ReadOnlySpan<LoadPairs.Pair> pairs)
-    {
-        foreach (var pair in pairs)
-        {
-            if (pair.X > pairs[0].X || pair.X < pairs[0].X)
-            {
-                return true;
-            }
-        }
-
-        return false;
-    }
-
-    private static double StandardError(ReadOnlySpan<LoadPairs.Pair> pairs, double intercept, double slope)
-    {
-        var squares = 0.0;
-        foreach (var (_, x, y) in pairs)
-        {
-            var residual = y - intercept - (slope * x);
-            squares += residual * residual;
-        }
-
-        return Math.Sqrt(squares / (pairs.Length - 2));
+        return LeastSquares.Of(x, y);
     }
 }

@@ -4,7 +4,7 @@ namespace LoadWatch.Loads;
 
 /// <summary>
 /// Three-zone load. Source: Lucia, Hoyos, Santalla, Earnest and Chicharro 2003, Tour de France versus Vuelta a Espana: which is harder?,
-/// Med Sci Sports Exerc 35:872-878 (title and multipliers from memory).
+/// Med Sci Sports Exerc 35:872-878 (title and multipliers from memory, the multipliers configurable).
 /// Load = t(1) + 2 t(2) + 3 t(3): t(k) minutes below the first ventilatory threshold, between the two, and above the second.
 /// The source leaves the edges open. Here: a threshold belongs to the zone above it. Everything below the first counts, rest too.
 /// </summary>
@@ -14,19 +14,20 @@ public static class LuciaLoad
 
     /// <summary>Arbitrary units, 0 or more; null for a histogram without time.</summary>
     /// <param name="heartRate">Milliseconds by whole bpm.</param>
-    public static double? Of(Histogram heartRate, HeartRateThresholds thresholds)
+    /// <param name="weights">Of the three zones.</param>
+    public static double? Of(Histogram heartRate, HeartRateThresholds thresholds, IReadOnlyList<double> weights)
     {
         double? load = null;
         foreach (var (bpm, milliseconds) in heartRate.Bins)
         {
-            load = (load ?? 0) + (milliseconds / MillisecondsPerMinute * Weight(bpm, thresholds));
+            load = (load ?? 0) + (milliseconds / MillisecondsPerMinute * weights[Zone(bpm, thresholds) - 1]);
         }
 
         return Significant.Round(load);
     }
 
-    /// <summary>The weight of a heart rate, 1 to 3.</summary>
-    public static int Weight(int bpm, HeartRateThresholds thresholds)
+    /// <summary>1 to 3.</summary>
+    public static int Zone(int bpm, HeartRateThresholds thresholds)
     {
         if (bpm < thresholds.FirstBpm)
         {

@@ -6,7 +6,8 @@ namespace LoadWatch.Loads;
 
 /// <summary>
 /// The dates on which a reference value changes that a person's loads rest on (I-15). Only kinds count that bear on something that the group looks at: a critical power
-/// moves no load. That a maximal heart rate by the birth year falls by a part of a beat each year is no change, and where heart rate is not valid its values change nothing.
+/// moves no load. That a maximal heart rate by the birth year falls by a part of a beat each year is no change, and where heart rate is not valid its
+/// values change nothing before it is again.
 /// </summary>
 public sealed class ReferencePeriods
 {
@@ -100,6 +101,7 @@ public sealed class ReferencePeriods
         .Where(anchor => kinds.Contains(anchor.Kind))
         .Select(anchor => anchor.Date ?? Beginning)
         .Append(Beginning)
+        .Concat(person.HeartRateInvalid.All.Select(period => period.Until?.PlusDays(1)).OfType<LocalDate>())
         .Distinct()
         .Order();
 
@@ -113,7 +115,7 @@ public sealed class ReferencePeriods
     private sealed class DatedValues(Person person, AnchorBook anchors)
     {
         public LocalDate HeartRateOn(LocalDate date) =>
-            person.HeartRateInvalidFrom is not { } invalid || date < invalid ? date : invalid > Beginning ? invalid.PlusDays(-1) : Beginning;
+            person.HeartRateInvalid.BeginningOf(date) is not { } invalid ? date : invalid > Beginning ? invalid.PlusDays(-1) : Beginning;
 
         public string Key(LocalDate date, IEnumerable<AnchorKind> kinds) => string.Join(' ', kinds.Select(kind => Text(kind, date)));
 

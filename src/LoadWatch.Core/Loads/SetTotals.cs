@@ -12,7 +12,7 @@ public static class SetTotals
     /// Sums over what is stated; a total of which nothing is stated is absent, and the remark says which sets lack what. A hold has no repetitions, and
     /// body weight alone is 0 kg: neither lacks anything.
     /// </summary>
-    public static (IReadOnlyList<Quantity> Quantities, string? Remark) Of(IReadOnlyList<StrengthSet> sets)
+    public static (IReadOnlyList<Quantity> Quantities, string? Remark) Of(IReadOnlyList<StrengthSet> sets, OneRepetitionMaxEquation equation)
     {
         var work = sets.Where(set => set.Active).ToList();
         if (work.Count == 0)
@@ -35,7 +35,7 @@ public static class SetTotals
             quantities.Add(new(QuantityNames.Kilograms, Significant.Round(kilograms), "kg", Estimated: false));
         }
 
-        quantities.AddRange(OneRepetitionMaxEstimate.Of(counted));
+        quantities.AddRange(OneRepetitionMaxEstimate.Of(counted, equation));
         return (quantities, Remark(work.Count, moved.Count, counted.Count, weighed.Count));
     }
 

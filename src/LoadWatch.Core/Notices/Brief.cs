@@ -36,10 +36,44 @@ public sealed record Brief
     public required IReadOnlyList<BriefLine> Questions { get; init; }
 
     public required IReadOnlyList<BriefGroup> Groups { get; init; }
+
+    /// <summary>The week; null where it is not told.</summary>
+    public BriefWeek? Week { get; init; }
+
+    /// <summary>Whom to call; null where the contact is not asked to.</summary>
+    public CallList? Calls { get; init; }
+
+    /// <summary>Today's sessions, one sheet each.</summary>
+    public IReadOnlyList<ClassSheet> Sheets { get; init; } = [];
+
+    /// <summary>Nobody of the brief has a known day: quiet is not said.</summary>
+    public bool NothingIsKnown { get; init; }
+
+    /// <summary>Ids of everybody whom it may name.</summary>
+    public IReadOnlyList<string> People { get; init; } = [];
 }
 
 /// <summary>One person to act on.</summary>
-public sealed record FlaggedPerson(string PersonId, string Name, Severity Severity, IReadOnlyList<FlaggedReason> Reasons);
+public sealed record FlaggedPerson(string PersonId, string Name, Severity Severity, IReadOnlyList<FlaggedReason> Reasons)
+{
+    /// <summary>The last 56 days; null where no picture is wanted.</summary>
+    public PersonPicture? Picture { get; init; }
+
+    /// <summary>One sentence, the gravest reason first: what, since when, against the usual, what else, what to consider, who decides.</summary>
+    public string Sentence => $"{What}; consider {Consider}; decides: {Decides}.";
+
+    /// <summary>The first part of the sentence, without a full stop.</summary>
+    public string What => PersonSentence.What(this);
+
+    /// <summary>What to consider about the gravest reason, without a full stop.</summary>
+    public string Consider => PersonSentence.Part(Reasons[0].Consider);
+
+    /// <summary>Everybody named as deciding over one of the reasons, once.</summary>
+    public string Decides => string.Join("; ", Reasons.Select(reason => PersonSentence.Part(reason.Decides)).Distinct(StringComparer.Ordinal));
+
+    /// <summary><c>new</c>, or since when the gravest reason stands.</summary>
+    public string Since => PersonSentence.Since(Reasons[0]);
+}
 
 /// <summary>One alert of a flagged person.</summary>
 /// <param name="Sentence">What, since when, against the usual.</param>
@@ -56,7 +90,14 @@ public sealed record FlaggedReason(
     string Consider,
     string Decides,
     bool IsNew,
-    bool IsSeen);
+    bool IsSeen)
+{
+    /// <summary>The thing itself: <c>load well above the usual</c>; empty where only the sentence says it.</summary>
+    public string Named { get; init; } = "";
+
+    /// <summary>The date on which it was raised; null where that is not told.</summary>
+    public LocalDate? Raised { get; init; }
+}
 
 /// <summary>One line about somebody or something.</summary>
 /// <param name="Subject">A name, or a file name.</param>
@@ -68,9 +109,9 @@ public sealed record BriefGroup(string Id, string Name, string LoadUnit, IReadOn
 
 /// <summary>One person in the group's table. Unknown is null.</summary>
 /// <param name="LastRecorded">Date of the last recording.</param>
-/// <param name="WeekLoad">Load of the last 7 days, in the group's unit.</param>
+/// <param name="WeekLoad">Load of the known ones of the last 7 days, in the group's unit: of a week that is not known whole, so far. Null when none is known.</param>
 /// <param name="UsualWeekLoad">Mean week of the 21 days before.</param>
-/// <param name="Ratio">The uncoupled ratio of the two.</param>
+/// <param name="Ratio">The uncoupled ratio of the two; null unless all 7 days are known.</param>
 /// <param name="KnownDays">Days with known load among the last 7.</param>
 /// <param name="DaysSinceHeavyLegs">
 /// Days since the last heavy-or-fast day of the legs; null where unknown or where none was ever seen, which the remark says.
@@ -92,7 +133,7 @@ public sealed record BriefRow(
     IReadOnlyList<BriefDay> Recent,
     string? Remark);
 
-/// <summary>One day of the small strip beside a name.</summary>
+/// <summary>One day of a strip or picture.</summary>
 /// <param name="Known">False where nothing is known.</param>
 /// <param name="Load">In the group's unit; null where unknown or not computable.</param>
 /// <param name="HeavyLegs">Heavy or fast work of the legs; null where unknown.</param>

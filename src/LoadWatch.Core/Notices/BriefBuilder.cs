@@ -1,5 +1,6 @@
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
+using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Plans;
 using NodaTime;
@@ -9,8 +10,8 @@ namespace LoadWatch.Notices;
 /// <summary>Builds one contact's brief from what is known. Pure: the same values give the same brief, whatever their order.</summary>
 public static class BriefBuilder
 {
-    /// <summary>People to act on that one brief names; the rest is counted.</summary>
-    public const int FlaggedAtMost = 10;
+    /// <summary>People to act on that one brief names, those to call among them; the rest is counted.</summary>
+    public const int RowsAtMost = 10;
 
     /// <param name="date">The contact's local date on which the brief is due.</param>
     /// <param name="subjects">People; those outside the contact's groups or people are left out.</param>
@@ -18,36 +19,109 @@ public static class BriefBuilder
     /// <param name="inboxIsAway">A watched folder cannot be looked into: nobody is named for what may lie in it.</param>
     public static Brief Build(Contact contact, LocalDate date, IReadOnlyList<BriefSubject> subjects, IReadOnlyList<BriefLine> questions, bool inboxIsAway = false)
     {
+        var forms = BriefForms.On(contact, date);
         var shown = Shown(contact, subjects);
         var self = contact.Role == ContactRole.Self && shown.Count == 1;
-        var upTo = shown.Where(subject => subject.Days.Count > 0).Max(subject => (LocalDate?)subject.Days[^1].Date);
+        var upTo = UpTo(shown);
         var silent = CommonSilence.Of(shown, inboxIsAway);
-        var flagged = shown.Where(subject => ToLookAt(subject) && !(silent.Contains(subject) && CommonSilence.IsOnlySilent(subject))).OrderByDescending(Worst).ToList();
-        var asked = CommonSilence.Lines(shown, silent).Concat(questions).ToList();
-        return new Brief
+
+        // The week lists them itself.
+        var unseen = forms.Contains(BriefForm.Daily) && !forms.Contains(BriefForm.Weekly) ? UnseenAlerts.Lines(contact, date, shown, self) : [];
+        var asked = CommonSilence.Lines(shown, silent).Concat(unseen).Concat(questions).ToList();
+        var brief = Bare(contact, date, upTo, asked) with { People = [.. shown.Select(subject => subject.Person.Id)] };
+        var first = new FirstLine(shown, upTo, asked, self) { Silent = silent.Count };
+        var last = upTo ?? date.PlusDays(-1);
+        if (forms.Contains(BriefForm.ClassSheet))
         {
-            ContactId = contact.Id,
-            ContactName = OneLine.Of(contact.Name),
-            Date = date,
-            DataUpTo = upTo,
-            FirstLine = FirstLine.Of(shown, flagged, silent.Count, upTo, asked, self),
-            Flagged = [.. Named(flagged).Select(subject => Flag(subject, contact.Role, self))],
-            FlaggedBeyond = Math.Max(0, flagged.Count - FlaggedAtMost),
+            brief = brief with { Sheets = ClassSheets.Of(shown, date, ViewOf(contact, shown)) };
+            first = first with { Sheets = brief.Sheets };
+        }
+
+        var flagged = ToLookAt(contact, date, shown, silent);
+        if (forms.Contains(BriefForm.CallList))
+        {
+            var room = forms.Contains(BriefForm.Daily) ? Math.Max(RowsAtMost / 2, RowsAtMost - flagged.Count) : RowsAtMost;
+            IReadOnlyList<BriefSubject> others = forms.Contains(BriefForm.Daily) ? [.. shown.ExceptBy(flagged.Select(subject => subject.Person.Id), subject => subject.Person.Id, StringComparer.Ordinal)] : shown;
+            brief = brief with { Calls = CallLists.Of(others, silent, date, last, room) };
+            first = first with { Calls = brief.Calls };
+        }
+
+        if (forms.Contains(BriefForm.Daily))
+        {
+            first = first with { Flagged = flagged };
+            brief = Daily(brief, contact, shown, flagged, last, self);
+        }
+
+        var week = forms.Contains(BriefForm.Weekly) && upTo is not null ? BriefWeeks.Of(shown, date, last, ByGroup(contact, shown), self) : null;
+        return brief with { Week = week, NothingIsKnown = first.NothingIsKnown, FirstLine = (first with { HasWeek = week is not null }).Write() };
+    }
+
+    /// <summary>Ids of those who get a picture: they want more days than others (<see cref="BriefDays.OfPicture"/>).</summary>
+    public static IReadOnlySet<string> Pictured(Contact contact, LocalDate date, IReadOnlyList<BriefSubject> subjects, bool inboxIsAway)
+    {
+        if (!BriefForms.On(contact, date).Contains(BriefForm.Daily))
+        {
+            return new HashSet<string>(StringComparer.Ordinal);
+        }
+
+        var shown = Shown(contact, subjects);
+        return Named(ToLookAt(contact, date, shown, CommonSilence.Of(shown, inboxIsAway)), RowsAtMost).Select(subject => subject.Person.Id).ToHashSet(StringComparer.Ordinal);
+    }
+
+    private static LocalDate? UpTo(List<BriefSubject> shown) => shown.Where(subject => subject.Days.Count > 0).Max(subject => (LocalDate?)subject.Days[^1].Date);
+
+    private static RoleView ViewOf(Contact contact, List<BriefSubject> shown) => RoleView.Of(contact.Role, shown.Count);
+
+    private static Brief Bare(Contact contact, LocalDate date, LocalDate? upTo, List<BriefLine> asked) => new()
+    {
+        ContactId = contact.Id,
+        ContactName = OneLine.Of(contact.Name),
+        Date = date,
+        DataUpTo = upTo,
+        FirstLine = "",
+        Flagged = [],
+        FlaggedBeyond = 0,
+        Returned = [],
+        Questions = [.. asked.Select(line => line with { Subject = OneLine.Of(line.Subject), Sentence = OneLine.Sentence(line.Sentence) })],
+        Groups = [],
+    };
+
+    private static Brief Daily(Brief bare, Contact contact, List<BriefSubject> shown, List<BriefSubject> flagged, LocalDate upTo, bool self)
+    {
+        var room = RowsAtMost - (bare.Calls?.Calls.Count ?? 0);
+        return bare with
+        {
+            Flagged = [.. Named(flagged, room).Select(subject => Flag(subject, contact.Role, upTo, self))],
+            FlaggedBeyond = Math.Max(0, flagged.Count - room),
             Returned = [.. shown.SelectMany(subject => Returned(subject, self))],
             Changed = [.. shown.SelectMany(subject => Changed(subject, self))],
-            Questions = [.. asked.Select(line => line with { Subject = OneLine.Of(line.Subject), Sentence = OneLine.Sentence(line.Sentence) })],
-            Groups = Groups(contact, shown, upTo ?? date.PlusDays(-1), self),
+            Groups = Groups(contact, shown, upTo, self),
         };
     }
 
-    /// <summary>Standing and told: one that is shelved is not.</summary>
-    internal static bool IsActive(AlertNews news) => AlertLife.IsActive(news.Alert.State) && news.Alert.ShelvedUntil is null;
+    /// <summary>Warnings first. Whoever is only silent, and not alone, is told of in common; whoever is only to be called, in the call list.</summary>
+    private static List<BriefSubject> ToLookAt(Contact contact, LocalDate date, List<BriefSubject> shown, IReadOnlyList<BriefSubject> silent)
+    {
+        var together = silent.Select(subject => subject.Person.Id).ToHashSet(StringComparer.Ordinal);
+        var calls = BriefForms.On(contact, date).Contains(BriefForm.CallList);
+        return
+        [
+            .. shown
+                .Where(subject => ToLookAt(subject) && !(together.Contains(subject.Person.Id) && CommonSilence.IsOnlySilent(subject)))
+                .Where(subject => !calls || !CallLists.IsOnlyToCall(subject, date))
+                .OrderByDescending(Worst),
+        ];
+    }
 
-    /// <summary>Active alerts, warnings first, then by rule and region.</summary>
+    /// <summary>Standing and told: one that is shelved or suppressed is not.</summary>
+    internal static bool IsActive(AlertNews news) => news.Alert.IsTold;
+
+    /// <summary>Active alerts, the gravest first: warnings, what nobody has seen yet, then by the rank of the rule.</summary>
     internal static IEnumerable<AlertNews> Active(BriefSubject subject) => subject.Alerts
         .Where(IsActive)
         .OrderByDescending(news => news.Alert.Severity)
-        .ThenBy(news => RuleTexts.Order(news.Alert.Key.Rule))
+        .ThenBy(news => news.Alert.State == AlertState.Acknowledged)
+        .ThenBy(news => RuleTexts.Rank(news.Alert.Key.Rule))
         .ThenBy(news => news.Alert.Id, StringComparer.Ordinal);
 
     /// <summary>The name to show: the person's own, or "You"; the id for a name of which nothing can be shown.</summary>
@@ -67,7 +141,7 @@ public static class BriefBuilder
     {
         var people = PeopleOf(contact, subjects);
         var view = RoleView.Of(contact.Role, people.Count);
-        return [.. people.Select(subject => subject with { Alerts = [.. subject.Alerts.Where(news => view.ShowsRule(news.Alert.Key.Rule))], Notes = [.. subject.Notes.Where(note => view.ShowsRule(note.Rule))] })];
+        return [.. people.Select(subject => subject with { Alerts = [.. subject.Alerts.Where(news => view.ShowsRule(news.Alert.Key.Rule))], Notes = [.. subject.Notes.Where(note => view.ShowsRule(note.Rule))], Suppressed = [.. subject.Suppressed.Where(finding => view.ShowsRule(finding.Rule))] })];
     }
 
     private static List<BriefSubject> PeopleOf(Contact contact, IReadOnlyList<BriefSubject> subjects) =>
@@ -84,14 +158,17 @@ public static class BriefBuilder
     private static Severity Worst(BriefSubject subject) => subject.Alerts.Where(IsActive).Max(news => news.Alert.Severity);
 
     /// <summary>Where there are too many for one brief, the graver reasons are named; in the order of the brief.</summary>
-    private static IEnumerable<BriefSubject> Named(List<BriefSubject> flagged)
+    private static IEnumerable<BriefSubject> Named(List<BriefSubject> flagged, int room)
     {
-        var named = flagged.OrderByDescending(Worst).ThenBy(subject => Active(subject).Min(news => RuleTexts.Rank(news.Alert.Key.Rule))).Take(FlaggedAtMost).ToHashSet();
-        return flagged.Where(named.Contains);
+        var named = flagged.OrderByDescending(Worst).ThenBy(subject => Active(subject).Min(news => RuleTexts.Rank(news.Alert.Key.Rule))).Take(room).Select(subject => subject.Person.Id).ToHashSet(StringComparer.Ordinal);
+        return flagged.Where(subject => named.Contains(subject.Person.Id));
     }
 
-    private static FlaggedPerson Flag(BriefSubject subject, ContactRole role, bool self) =>
-        new(subject.Person.Id, NameOf(subject.Person, self), Worst(subject), [.. Active(subject).Select(news => Reason(news, role, self))]);
+    private static FlaggedPerson Flag(BriefSubject subject, ContactRole role, LocalDate upTo, bool self) =>
+        new(subject.Person.Id, NameOf(subject.Person, self), Worst(subject), [.. Active(subject).Select(news => Reason(news, role, self))])
+        {
+            Picture = PersonPictures.Of(subject, upTo),
+        };
 
     private static FlaggedReason Reason(AlertNews news, ContactRole role, bool self) => new(
         news.Alert.Id,
@@ -102,7 +179,11 @@ public static class BriefBuilder
         RuleTexts.Consider(news.Alert.Key, self),
         RuleTexts.Decides(role),
         news.IsNew,
-        news.Alert.State == AlertState.Acknowledged);
+        news.Alert.State == AlertState.Acknowledged)
+    {
+        Named = RuleTexts.Named(news.Alert.Key, self),
+        Raised = news.Alert.Raised,
+    };
 
     private static IEnumerable<BriefLine> Returned(BriefSubject subject, bool self) => subject.Alerts
         .Where(news => news.ReturnedSince && !IsActive(news))
@@ -120,13 +201,12 @@ public static class BriefBuilder
     private static DayPlan PlanOf(BriefSubject subject) => subject.Days.Count == 0 ? DayPlan.None : subject.Days[^1].Plan;
 
     private static IReadOnlyList<BriefGroup> Groups(Contact contact, List<BriefSubject> shown, LocalDate upTo, bool self) =>
-    [
-        .. shown
-            .GroupBy(subject => subject.Group.Id, StringComparer.Ordinal)
-            .OrderBy(group => Place(contact.Groups, group.Key))
-            .ThenBy(group => group.Key, StringComparer.Ordinal)
-            .Select(group => Table(group.First().Group, group, upTo, RoleView.Of(contact.Role, shown.Count), self)),
-    ];
+        [.. ByGroup(contact, shown).Select(group => Table(group.First().Group, group, upTo, ViewOf(contact, shown), self))];
+
+    private static IOrderedEnumerable<IGrouping<string, BriefSubject>> ByGroup(Contact contact, List<BriefSubject> shown) => shown
+        .GroupBy(subject => subject.Group.Id, StringComparer.Ordinal)
+        .OrderBy(group => Place(contact.Groups, group.Key))
+        .ThenBy(group => group.Key, StringComparer.Ordinal);
 
     private static BriefGroup Table(Group group, IEnumerable<BriefSubject> members, LocalDate upTo, RoleView view, bool self) => new(
         group.Id,

@@ -19,6 +19,9 @@ public static class BriefNumbers
         _ => value.Value.ToString("0", CultureInfo.InvariantCulture),
     };
 
+    /// <summary>The load of a row's week, with a plus where not all of its days are known.</summary>
+    public static string SoFar(BriefRow row) => row is { WeekLoad: not null, KnownDays: < 7 } ? Load(row.WeekLoad) + "+" : Load(row.WeekLoad);
+
     /// <summary>Two decimals, so that a value just under a limit does not read as the limit.</summary>
     public static string Ratio(double? value) => value?.ToString("0.00", CultureInfo.InvariantCulture) ?? Unknown;
 

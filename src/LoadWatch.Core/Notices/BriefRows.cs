@@ -1,6 +1,9 @@
 using System.Globalization;
 using LoadWatch.Alerts;
 using LoadWatch.Days;
+using LoadWatch.Findings;
+using LoadWatch.Limits;
+using LoadWatch.Plans;
 using LoadWatch.Stimulus;
 using NodaTime;
 
@@ -36,18 +39,19 @@ internal static class BriefRows
             subject.Person.Id,
             BriefBuilder.NameOf(subject.Person, self),
             BriefBuilder.ToLookAt(subject),
-            subject.Days.Where(day => day.State == DayState.Recorded).Max(day => (LocalDate?)day.Date),
-            today?.Acute,
+            PersonNotes.LastRecorded(subject),
+            SoFar(days, upTo),
             back is null ? today?.ChronicBefore : back.UsualWeek,
-            back is null ? today?.RatioUncoupled : null,
+            back is null && known == WeekDays ? today?.RatioUncoupled : null,
             known,
             EverHeavy(days, upTo, legs) ? legs?.DaysSince : null,
             legs?.Days28,
-            [.. Enumerable.Range(1 - StripDays, StripDays).Select(offset => Strip(days, upTo.PlusDays(offset)))],
-            Remark(subject, [.. Absent(days, upTo, view), .. Own(subject, today, back, known, NeverHeavy(days, upTo, legs))]));
+            [.. Enumerable.Range(1 - StripDays, StripDays).Select(offset => DayOf(days, upTo.PlusDays(offset)))],
+            Remark(subject, [.. Absent(days, upTo, view), .. RoomOf(subject, upTo, self), .. Own(subject, today, back, known, NeverHeavy(days, upTo, legs))]));
     }
 
-    private static BriefDay Strip(Dictionary<LocalDate, Day> days, LocalDate date)
+    /// <summary>A date without a day is unknown.</summary>
+    public static BriefDay DayOf(Dictionary<LocalDate, Day> days, LocalDate date)
     {
         var day = days.GetValueOrDefault(date);
         return new BriefDay(
@@ -57,12 +61,24 @@ internal static class BriefRows
             day?.Regions.GetValueOrDefault(BodyRegion.Legs)?.HeavyOrFast);
     }
 
+    /// <summary>Load of the known days of the last 7, not scaled up: a week with an open end is told as it stands. Null when none is known.</summary>
+    public static double? SoFar(Dictionary<LocalDate, Day> days, LocalDate upTo)
+    {
+        var loads = Enumerable.Range(0, WeekDays).Select(back => days.GetValueOrDefault(upTo.PlusDays(-back))?.Load).OfType<double>().ToList();
+        return loads.Count == 0 ? null : Significant.Round(loads.Sum());
+    }
+
     private static bool EverHeavy(Dictionary<LocalDate, Day> days, LocalDate upTo, RegionDay? legs) =>
         legs?.DaysSince is not null && NeverHeavy(days, upTo, legs) is null;
 
     /// <summary>Days without any, where the count began at the first covered day instead of at a heavy-or-fast one; else null.</summary>
     private static int? NeverHeavy(Dictionary<LocalDate, Day> days, LocalDate upTo, RegionDay? legs)
     {
+        if (legs is { Never: true, DaysSince: { } all })
+        {
+            return all;
+        }
+
         if (legs?.DaysSince is not { } since || !days.TryGetValue(upTo.PlusDays(-since), out var start))
         {
             return null;
@@ -79,6 +95,15 @@ internal static class BriefRows
             .Concat(given.Count > RemarksShown ? [$"{given.Count - RemarksShown} more of the kind"] : Array.Empty<string>());
         var remark = string.Join("; ", all);
         return remark.Length == 0 ? null : remark;
+    }
+
+    /// <summary>Told to whoever reads about themselves, where there is a figure.</summary>
+    private static IEnumerable<string> RoomOf(BriefSubject subject, LocalDate upTo, bool self)
+    {
+        if (self && subject.Room is { Load: not null } room && room.Date == upTo.PlusDays(1))
+        {
+            yield return $"{RoomWords.Of(room)}: {RoomWords.Meaning}";
+        }
     }
 
     /// <summary><c>away since 2 March</c>.</summary>
@@ -101,7 +126,10 @@ internal static class BriefRows
     /// <summary>Told while a record is young, then no more: a person with heart rate alone is not reminded of it every morning.</summary>
     private static bool IsFirstUnseen(BriefSubject subject, Day? today) =>
         today?.Regions.GetValueOrDefault(BodyRegion.Legs, RegionDay.NotCovered).DaysSince is null
-        && subject.Days.Count(day => day.State == DayState.Recorded) is >= UnseenFrom and <= UnseenTo;
+        && subject.Days.Count(day => day.State == DayState.Recorded) is >= UnseenFrom and <= UnseenTo
+        && (subject.Days.Count < BriefDays.Usual || subject.Days[0].DaysSinceRecorded is null);
+
+    private static bool IsHeldBack(AlertNews news) => news.Alert.Watch == AlertWatch.SuppressedByDesign && AlertLife.IsActive(news.Alert.State);
 
     private static IEnumerable<string> Own(BriefSubject subject, Day? today, ReturnPhase? back, int knownOf7, int? neverHeavyDays)
     {
@@ -120,7 +148,17 @@ internal static class BriefRows
             yield return $"shelved until {BriefNumbers.Day(news.Alert.ShelvedUntil)}: {RuleTexts.Named(news.Alert.Key, self: false)}";
         }
 
-        if (subject.Days.All(day => day.State != DayState.Recorded))
+        foreach (var news in subject.Alerts.Where(IsHeldBack).OrderBy(news => news.Alert.Id, StringComparer.Ordinal))
+        {
+            yield return $"not watched for now by plan or answers: {RuleTexts.Named(news.Alert.Key, self: false)}";
+        }
+
+        foreach (var finding in subject.Suppressed.Where(finding => !subject.Alerts.Any(news => news.Alert.Key == finding.Key)).OrderBy(finding => RuleTexts.Order(finding.Rule)).Take(RemarksShown))
+        {
+            yield return RuleTexts.Quiet(finding.Key, QuietReason.SuppressedByPlan, today?.Plan ?? DayPlan.None, self: false);
+        }
+
+        if (PersonNotes.LastRecorded(subject) is null)
         {
             yield return "nothing recorded yet";
             yield break;

@@ -13,7 +13,16 @@ public static class BriefText
     internal const string ReferenceValueChanged = "REFERENCE VALUE CHANGED";
     internal const string NeedsAnAnswer = "NEEDS AN ANSWER";
     internal const string Everybody = "EVERYBODY";
+    internal const string TheWeek = "THE WEEK";
+    internal const string ToCall = "TO CALL";
+    internal const string Today = "TODAY";
+    internal const string StandingLong = "STANDING FOR MORE THAN 14 DAYS";
+    internal const string LessLegWork = "LESS HEAVY OR FAST LEG WORK";
     internal const string HowToRead = "HOW TO READ THIS";
+
+    /// <summary>Headings above what is said before the tables.</summary>
+    internal static readonly IReadOnlyList<string> Headings =
+        [ToLookAt, Today, ToCall, TheWeek, StandingLong, LessLegWork, BackToUsual, ReferenceValueChanged, NeedsAnAnswer];
 
     private static readonly LocalDatePattern LongDate = LocalDatePattern.Create("dddd d MMMM uuuu", CultureInfo.InvariantCulture);
 
@@ -23,10 +32,13 @@ public static class BriefText
     /// <summary>The subject of a mail: neither names nor values, since relays log it.</summary>
     public static string Subject(Brief brief)
     {
-        var news = (brief.Flagged.Count > 0, brief.Questions.Count > 0) switch
+        var news = brief switch
         {
-            (true, _) => "something to look at",
-            (_, true) => "something needs an answer",
+            { Flagged.Count: > 0 } => "something to look at",
+            { Calls.Calls.Count: > 0 } => "somebody to call",
+            { Questions.Count: > 0 } => "something needs an answer",
+            { Sheets.Count: > 0 } => "who is planned today",
+            { NothingIsKnown: true } => "nothing is known yet",
             _ => "all quiet",
         };
         return $"Morning brief, {DateInWords(brief.Date)}: {news}";
@@ -44,6 +56,9 @@ public static class BriefText
         lines.Blank();
         lines.Paragraph("", brief.FirstLine);
         WriteFlagged(lines, brief);
+        FormText.WriteSheets(lines, brief.Sheets);
+        FormText.WriteCalls(lines, brief.Calls);
+        FormText.WriteWeek(lines, brief.Week);
         WriteSection(lines, BackToUsual, brief.Returned);
         WriteSection(lines, ReferenceValueChanged, brief.Changed);
         WriteSection(lines, NeedsAnAnswer, brief.Questions);
@@ -62,14 +77,11 @@ public static class BriefText
         Heading(lines, ToLookAt);
         foreach (var person in brief.Flagged)
         {
-            lines.Paragraph("- ", $"{person.Name} ({SeverityWord(person.Severity)})");
-            foreach (var reason in person.Reasons)
+            lines.Paragraph("- ", $"{person.Name} ({HeadOf(person)}): {person.Sentence}");
+            if (person.Picture is { } picture)
             {
-                lines.Paragraph("  ", reason.Sentence + Mark(reason));
-                lines.Paragraph("  ", $"Consider: {reason.Consider}");
+                lines.Paragraph("  ", picture.Words);
             }
-
-            lines.Paragraph("  ", $"Decides: {WhoDecides(person)}.");
         }
 
         if (brief.FlaggedBeyond > 0)
@@ -78,13 +90,16 @@ public static class BriefText
         }
     }
 
-    /// <summary>Everybody named as deciding over one of the person's reasons, once.</summary>
-    public static string WhoDecides(FlaggedPerson person) =>
-        string.Join("; ", person.Reasons.Select(reason => reason.Decides).Distinct(StringComparer.Ordinal));
+    /// <summary><c>warning, new</c> or <c>notice, since 27 Feb</c>.</summary>
+    public static string HeadOf(FlaggedPerson person) =>
+        person.Since.Length == 0 ? SeverityWord(person.Severity) : $"{SeverityWord(person.Severity)}, {person.Since}";
 
     /// <summary>How the people beyond the named ones are told.</summary>
     public static string Beyond(int count) =>
         count == 1 ? "And 1 more to look at, marked in the table below." : $"And {count} more to look at, marked in the tables below.";
+
+    /// <summary>How those are told whom a list has no room for.</summary>
+    public static string More(int count) => $"And {count} more.";
 
     public static string SeverityWord(Severity severity) => severity switch
     {
@@ -93,14 +108,7 @@ public static class BriefText
         _ => "note",
     };
 
-    private static string Mark(FlaggedReason reason) => (reason.IsNew, reason.IsSeen) switch
-    {
-        (true, _) => " (new)",
-        (_, true) => " (seen)",
-        _ => "",
-    };
-
-    private static void WriteSection(TextLines lines, string heading, IReadOnlyList<BriefLine> items)
+    internal static void WriteSection(TextLines lines, string heading, IReadOnlyList<BriefLine> items)
     {
         if (items.Count == 0)
         {
@@ -129,7 +137,7 @@ public static class BriefText
         }
     }
 
-    private static void Heading(TextLines lines, string heading)
+    internal static void Heading(TextLines lines, string heading)
     {
         lines.Blank();
         lines.Line(heading);

@@ -16,7 +16,7 @@ internal static class BriefTextTable
 
         lines.Blank();
         lines.Line(BriefText.Everybody);
-        lines.Paragraph("", "* to look at. ? unknown. Known: days of the last 7. Legs: days since the last heavy-or-fast leg day.");
+        lines.Paragraph("", "* to look at. ? unknown. + so far, of the known days. Known: days of the last 7. Legs: days since the last heavy-or-fast leg day.");
         foreach (var group in groups)
         {
             lines.Blank();
@@ -34,7 +34,7 @@ internal static class BriefTextTable
         lines.Line(Columns(
             row.Flagged ? '*' : ' ',
             Cut(OneLine.Of(row.Name)),
-            BriefNumbers.Load(row.WeekLoad),
+            BriefNumbers.SoFar(row),
             BriefNumbers.Load(row.UsualWeekLoad),
             BriefNumbers.Ratio(row.Ratio),
             BriefNumbers.Count(row.KnownDays),

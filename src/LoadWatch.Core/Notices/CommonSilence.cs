@@ -35,7 +35,7 @@ internal static class CommonSilence
     }
 
     private static LocalDate LastRecorded(BriefSubject subject) =>
-        subject.Days.Where(day => day.State == DayState.Recorded).Select(day => day.Date).DefaultIfEmpty(LocalDate.MinIsoValue.PlusDays(1)).Max();
+        PersonNotes.LastRecorded(subject) ?? LocalDate.MinIsoValue.PlusDays(1);
 
     /// <summary>Whether silence is the only reason to look at somebody.</summary>
     public static bool IsOnlySilent(BriefSubject subject) => BriefBuilder.Active(subject).All(news => news.Alert.Key.Rule == Rule);
@@ -48,5 +48,5 @@ internal static class CommonSilence
             $"recordings of {group.Count()} of {shown.Count(subject => subject.Group.Id == group.Key)} people do not come in: one upload, inbox or charger may be the cause, so they are not named one by one"));
 
     private static bool IsSilent(BriefSubject subject) =>
-        subject.Alerts.Any(news => news.Alert.Key.Rule == Rule && AlertLife.IsActive(news.Alert.State) && news.Alert.ShelvedUntil is null);
+        subject.Alerts.Any(news => news.Alert.Key.Rule == Rule && news.Alert.IsTold);
 }

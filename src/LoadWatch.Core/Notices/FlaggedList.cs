@@ -7,11 +7,11 @@ namespace LoadWatch.Notices;
 /// </summary>
 public static class FlaggedList
 {
-    /// <param name="alerts">Of the contact's people. What somebody has seen still stands, so acknowledging changes no list; what is shelved is not told.</param>
+    /// <param name="alerts">Of the contact's people. What somebody has seen still stands, so acknowledging changes no list; what is shelved or suppressed is not told.</param>
     public static string Of(IEnumerable<Alert> alerts) => string.Join(
         '\n',
         alerts
-            .Where(alert => AlertLife.IsActive(alert.State) && alert.ShelvedUntil is null)
+            .Where(alert => alert.IsTold)
             .Select(alert => alert.Key.Person)
             .Distinct(StringComparer.Ordinal)
             .Order(StringComparer.Ordinal));

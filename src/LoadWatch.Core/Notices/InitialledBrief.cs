@@ -15,8 +15,7 @@ internal sealed class InitialledBrief
 
     public InitialledBrief(Brief brief, IReadOnlyList<Person> people)
     {
-        // Everybody of the brief stands in one of its tables.
-        var shown = brief.Groups.SelectMany(group => group.Rows).Select(row => row.PersonId).ToHashSet(StringComparer.OrdinalIgnoreCase);
+        var shown = brief.Groups.SelectMany(group => group.Rows).Select(row => row.PersonId).Concat(brief.People).ToHashSet(StringComparer.OrdinalIgnoreCase);
         this.brief = brief;
         names = people.ToDictionary(person => person.Id, person => BriefBuilder.NameOf(person, self: false), StringComparer.OrdinalIgnoreCase);
         labels = Initials.Of(people.Where(person => shown.Contains(person.Id)));
@@ -31,6 +30,31 @@ internal sealed class InitialledBrief
         Changed = [.. brief.Changed.Select(line => line with { Subject = Subject(line.Subject), Sentence = cover.Sentence(line.Sentence) })],
         Questions = [.. brief.Questions.Select(Question)],
         Groups = [.. brief.Groups.Select(group => group with { Name = cover.Sentence(group.Name), Rows = [.. group.Rows.Select(Row)] })],
+        Week = brief.Week is { } week ? Week(week) : null,
+        Calls = brief.Calls is { } calls ? calls with { Calls = [.. calls.Calls.Select(Call)] } : null,
+        Sheets = [.. brief.Sheets.Select(sheet => new ClassSheet(cover.Sentence(sheet.Heading), [.. sheet.People.Select(Planned)]))],
+        People = [],
+    };
+
+    private BriefWeek Week(BriefWeek week) => week with
+    {
+        Groups = [.. week.Groups.Select(group => group with { Name = cover.Sentence(group.Name) })],
+        Standing = [.. week.Standing.Select(line => line with { Subject = Subject(line.Subject), Sentence = cover.Sentence(line.Sentence) })],
+        Lost = [.. week.Lost.Select(line => line with { Subject = Subject(line.Subject) })],
+    };
+
+    private Call Call(Call call) => call with
+    {
+        PersonId = Label(call.PersonId, call.Name),
+        Name = Name(call.PersonId, call.Name),
+        Why = cover.Sentence(call.Why),
+    };
+
+    private ClassPerson Planned(ClassPerson person) => person with
+    {
+        PersonId = Label(person.PersonId, person.Name),
+        Name = Name(person.PersonId, person.Name),
+        Note = person.Note is null ? null : cover.Sentence(person.Note),
     };
 
     /// <summary>Ids of people and alerts may be names, too. A label tells people apart as well; nobody needs the alert's id in a mail.</summary>
@@ -38,7 +62,7 @@ internal sealed class InitialledBrief
     {
         PersonId = Label(person.PersonId, person.Name),
         Name = Name(person.PersonId, person.Name),
-        Reasons = [.. person.Reasons.Select(reason => reason with { AlertId = "", Sentence = cover.Sentence(reason.Sentence) })],
+        Reasons = [.. person.Reasons.Select(reason => reason with { AlertId = "", Sentence = cover.Sentence(reason.Sentence), Named = cover.Sentence(reason.Named) })],
     };
 
     private BriefRow Row(BriefRow row) => row with

@@ -26,5 +26,9 @@ public static class MailNames
         Changed = [],
         Questions = [],
         Groups = [],
+        Week = null,
+        Calls = null,
+        Sheets = [],
+        People = [],
     };
 }

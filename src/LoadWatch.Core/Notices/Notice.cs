@@ -26,7 +26,7 @@ public sealed record Notice(
     /// <summary>The text as it may leave the machine, frozen like the other; null where that is <see cref="Text"/> itself.</summary>
     public string? MailText { get; init; }
 
-    /// <summary>The same for <see cref="Html"/>.</summary>
+    /// <summary>The HTML of its mail, with the pictures in it; null where no mail goes out, and for one of before mails had their own.</summary>
     public string? MailHtml { get; init; }
 }
 

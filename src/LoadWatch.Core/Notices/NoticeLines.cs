@@ -62,7 +62,7 @@ public static class NoticeLines
         var heading = "";
         foreach (var paragraph in Paragraphs(text).TakeWhile(IsSaid))
         {
-            if (paragraph is BriefText.ToLookAt or BriefText.BackToUsual or BriefText.NeedsAnAnswer)
+            if (BriefText.Headings.Contains(paragraph, StringComparer.Ordinal))
             {
                 heading = paragraph.ToLowerInvariant() + ": ";
             }

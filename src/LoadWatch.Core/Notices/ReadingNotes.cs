@@ -7,11 +7,14 @@ public static class ReadingNotes
     [
         new("Load", "the quantity that the group watches, summed over sessions; AU are units of no dimension: minutes "
             + "weighted by heart rate, or by the rating of effort. "
-            + "The week is the last 7 days, scaled up when a day or two of it are unknown."),
+            + "The week is the last 7 days. Where some of them are unknown it stands as it is so far, with a plus, and is not divided by the usual."),
         new("Usual", "the mean week of the 21 days before those 7. \u201CTimes usual\u201D is the week divided by it."),
         new("Heavy-or-fast leg day", "a day with enough hard work of the legs (heavy sets, sprints, efforts well above a steady hard pace) to call on "
             + "the large, fast motor units. Estimated, never measured. \u201CLegs\u201D counts the days since the last one."),
         new("Known days", "days of the last 7 whose load is known. A rest day is known."),
+        new("Picture", "a bar is the load of a day, the grey band the usual weeks spread over their days, a level line the mean of seven days, a dash rest. "
+            + "A hollow square is a day of which nothing is known, a hollow bar with a stroke one whose load could not be computed. Below, a diamond "
+            + "is heavy or fast leg work, a small hollow one that this is unknown."),
         new("Unknown", "nothing came in, or it could not be computed. It is never counted as nought, and alone it raises or clears "
             + "nothing but the line about missing recordings."),
     ];

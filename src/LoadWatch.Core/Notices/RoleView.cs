@@ -9,9 +9,6 @@ namespace LoadWatch.Notices;
 /// </summary>
 public sealed record RoleView
 {
-    /// <summary>The rule about tests of function; it is told to clinicians and to the person.</summary>
-    public const string FunctionTest = FunctionTestRule.RuleName;
-
     private readonly ContactRole role;
 
     private RoleView(ContactRole role) => this.role = role;
@@ -24,13 +21,9 @@ public sealed record RoleView
     /// <summary>Of a brief about so many people: who reads as "self" about others than one person is shown no more than a coach.</summary>
     public static RoleView Of(ContactRole role, int people) => new(role == ContactRole.Self && people != 1 ? ContactRole.Coach : role);
 
-    /// <summary>Whether alerts of a rule reach the reader. A rule that is not named here is for everybody.</summary>
+    /// <summary>Whether alerts of a rule reach the reader: those about tests of function are told to clinicians and to the person.</summary>
     /// <param name="rule">Name of the rule: <c>load_ratio</c>.</param>
-    public bool ShowsRule(string rule) => rule switch
-    {
-        FunctionTest => role is ContactRole.Clinician or ContactRole.Self,
-        _ => true,
-    };
+    public bool ShowsRule(string rule) => RuleBook.Of(rule)?.Record.IsOfHealth != true || role is ContactRole.Clinician or ContactRole.Self;
 
     /// <summary>Why somebody is not training, in one word: <c>ill</c>, <c>injured</c>, <c>away</c>; to coach and front desk always the last.</summary>
     public string Word(AbsenceWord absence) => (ShowsHealth, absence) switch

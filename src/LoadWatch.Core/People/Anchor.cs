@@ -54,4 +54,12 @@ public sealed record Anchor(
     AnchorSource Source,
     string? Exercise = null,
     string? Note = null,
-    string? Machine = null);
+    string? Machine = null)
+{
+    /// <summary>The sport of a capacity of power, as its family's word (<see cref="Recordings.Sport.Family"/>); null holds for every sport but those on foot. Null for
+    /// every other kind.</summary>
+    public string? Sport { get; init; }
+
+    /// <summary>When it was shown, where that is another date than the first on which it holds; null: on that date.</summary>
+    public LocalDate? ShownOn { get; init; }
+}

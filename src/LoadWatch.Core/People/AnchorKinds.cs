@@ -25,6 +25,9 @@ public static class AnchorKinds
     public static IEnumerable<AnchorKindInfo> All => Table.Values;
 
     public static AnchorKindInfo Of(AnchorKind kind) => Table[kind];
+
+    /// <summary>Whether an anchor of the kind may be of one sport: what somebody can do on a bicycle says little of the rowing machine.</summary>
+    public static bool IsOfSport(AnchorKind kind) => kind is AnchorKind.CriticalPower or AnchorKind.WPrime or AnchorKind.PowerMax;
 }
 
 /// <param name="Name">As written in <c>anchors.csv</c>.</param>

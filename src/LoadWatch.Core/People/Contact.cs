@@ -39,9 +39,12 @@ public sealed record Contact(
     LocalTime BriefAt,
     IReadOnlySet<IsoDayOfWeek> BriefDays)
 {
+    /// <summary>What the brief holds; without <see cref="BriefForm.Daily"/> nobody is told of as somebody to look at.</summary>
+    public IReadOnlyList<BriefForm> Forms { get; init; } = [BriefForm.Daily];
+
     /// <summary>Address for mail, or null for none.</summary>
     public string? Mail { get; init; }
 
-    /// <summary>Names in the bodies of mail; page and notice file, which stay on the machine, hold them in full.</summary>
+    /// <summary>Names in the bodies of mail and webhook; page and notice file, which stay on the machine, hold them in full.</summary>
     public NamesShown Names { get; init; } = NamesShown.Full;
 }

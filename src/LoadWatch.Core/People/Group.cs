@@ -1,4 +1,5 @@
 using LoadWatch.Findings;
+using NodaTime;
 
 namespace LoadWatch.People;
 
@@ -8,4 +9,7 @@ public sealed record Group(string Id, string Name, string LoadQuantity, RuleLimi
 {
     /// <summary>Names of the quantities that stand in, in this order, where a session lacks the load; each converted by the person's own sessions.</summary>
     public IReadOnlyList<string> LoadFallbacks { get; init; } = [];
+
+    /// <summary>Local time at which a day of its people begins.</summary>
+    public LocalTime DayBeginsAt { get; init; } = LocalTime.Midnight;
 }

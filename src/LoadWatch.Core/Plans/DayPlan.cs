@@ -13,5 +13,5 @@ public sealed record DayPlan(
     /// <summary>Nothing is planned or said.</summary>
     public static DayPlan None { get; } = new(null, null, false, null, 0, []);
 
-    public bool IsIn(PlanWord phase) => Phases.Contains(phase);
+    public bool IsIn(PlanWord phase) => Phases.Count > 0 && Phases.Contains(phase);
 }

@@ -1,11 +1,9 @@
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// Relative drive of an endurance channel. Assumption: the critical intensity sits at a fixed drive (0.65 usually), the momentary maximum
-/// at 1.
-/// Source of the momentary maximum: Morton 1996, A 3-parameter critical power model, Ergonomics 39:611-619: available power = CP + (Pmax -
-/// CP) W'bal/W'.
-/// X up to X_c: e = 0.65 X / X_c. Above: e = min(1, 0.65 + 0.35 (X - X_c) / ((X_max - X_c) b)), b = W'bal / W'.
+/// Relative drive of an endurance channel. Assumption: the critical intensity sits at a fixed drive (0.65 usually), the momentary maximum at 1, which is
+/// what <see cref="AvailablePower"/> leaves.
+/// X up to X_c: e = 0.65 X / X_c. Above: e = min(1, 0.65 + 0.35 (X - X_c) / (X_available - X_c)), X_available - X_c = (X_max - X_c) b, b = W'bal / W'.
 /// </summary>
 public static class Drive
 {
@@ -30,6 +28,6 @@ public static class Drive
 
         return balance <= 0
             ? 1
-            : Math.Min(1, criticalDrive + ((1 - criticalDrive) * (intensity - critical) / ((max - critical) * balance)));
+            : Math.Min(1, criticalDrive + ((1 - criticalDrive) * (intensity - critical) / (AvailablePower.Watts(critical, max, balance) - critical)));
     }
 }

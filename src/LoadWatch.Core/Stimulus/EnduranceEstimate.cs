@@ -14,6 +14,15 @@ public sealed record EnduranceEstimate(
     /// <summary>The session went through the region, and no channel could tell what it asked for.</summary>
     public static EnduranceEstimate Nothing { get; } = new(Grade.E, StimulusChannels.None, null, null, null, null, []);
 
+    /// <summary>This one, with the slow and medium classes of what a poorer channel tells of other moments. Bouts and the largest class stay: a poorer channel
+    /// knows none.</summary>
+    public EnduranceEstimate FilledBy(EnduranceEstimate poorer, long milliseconds) => this with
+    {
+        SlowSeconds = Sum(SlowSeconds, poorer.SlowSeconds),
+        MediumSeconds = Sum(MediumSeconds, poorer.MediumSeconds),
+        NotSeen = [.. NotSeen, .. EnduranceRemarks.OfFill(Channel, milliseconds)],
+    };
+
     public RegionStimulus For(BodyRegion region, IEnumerable<string> alsoNotSeen) => new(
         region,
         Grade,
@@ -25,4 +34,7 @@ public sealed record EnduranceEstimate(
         MediumSeconds,
         LargeSeconds,
         [.. NotSeen, .. alsoNotSeen]);
+
+    private static Band? Sum(Band? one, Band? other) =>
+        one is { } first && other is { } second ? Bands.Of(first.Low + second.Low, first.Mid + second.Mid, first.High + second.High) : null;
 }

@@ -8,13 +8,14 @@ namespace LoadWatch.Stimulus;
 public static class HeartRateStimulus
 {
     /// <param name="heartRate">Usable readings, bpm.</param>
-    public static EnduranceEstimate Of(UsableChannel heartRate, HeartRateDrive drive)
+    /// <param name="milliseconds">For how long each of them counts; 0 where a better channel tells.</param>
+    public static EnduranceEstimate Of(UsableChannel heartRate, ReadOnlySpan<int> milliseconds, HeartRateDrive drive, Variants variants)
     {
         var fractions = ArrayPool<double>.Shared.Rent(heartRate.Count);
         try
         {
             drive.SmoothFractions(heartRate, fractions);
-            return Of(fractions, heartRate.Milliseconds, drive);
+            return Of(fractions, milliseconds, drive, variants);
         }
         finally
         {
@@ -22,11 +23,11 @@ public static class HeartRateStimulus
         }
     }
 
-    private static EnduranceEstimate Of(double[] fractions, ReadOnlySpan<int> milliseconds, HeartRateDrive drive)
+    private static EnduranceEstimate Of(double[] fractions, ReadOnlySpan<int> milliseconds, HeartRateDrive drive, Variants variants)
     {
-        var low = Read(fractions, milliseconds, drive, Variant.Low);
-        var mid = Read(fractions, milliseconds, drive, Variant.Mid);
-        var high = Read(fractions, milliseconds, drive, Variant.High);
+        var low = Read(fractions, milliseconds, drive, variants.Low);
+        var mid = Read(fractions, milliseconds, drive, variants.Mid);
+        var high = Read(fractions, milliseconds, drive, variants.High);
         return new EnduranceEstimate(
             Grade.E,
             StimulusChannels.HeartRate,
@@ -34,7 +35,7 @@ public static class HeartRateStimulus
             Bands.Of(low, mid, high, reading => reading.Slow),
             Bands.Of(low, mid, high, reading => reading.Medium),
             LargeSeconds: null,
-            ["bouts and the largest class: heart rate cannot show them; power with critical_power and power_max, or logged sets, would"]);
+            [EnduranceRemarks.OfHeartRate]);
     }
 
     private static ClassFractions Read(ReadOnlySpan<double> fractions, ReadOnlySpan<int> milliseconds, HeartRateDrive drive, Variant variant)
@@ -43,6 +44,11 @@ public static class HeartRateStimulus
         var (before, recruited) = (double.NaN, default(ClassFractions));
         for (var sample = 0; sample < milliseconds.Length; sample++)
         {
+            if (milliseconds[sample] == 0)
+            {
+                continue;
+            }
+
             if (fractions[sample] != before)
             {
                 before = fractions[sample];

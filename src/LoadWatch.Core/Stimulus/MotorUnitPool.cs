@@ -26,6 +26,7 @@ public sealed class MotorUnitPool
     private readonly double[] contractionSeconds = new double[Units];
     private readonly double[] peakRates = new double[Units];
     private readonly double[] forceFractions = new double[Units];
+    private readonly Lazy<InverseTable> inverse;
 
     private MotorUnitPool(double thresholdRange)
     {
@@ -41,6 +42,7 @@ public sealed class MotorUnitPool
         HighestExcitation = thresholds[^1] + peakRates[^1] - LowestRate;
         MaximumForce = ForceAt(HighestExcitation);
         forceFractions = [.. thresholds.Select(threshold => ForceAt(threshold) / MaximumForce)];
+        inverse = new Lazy<InverseTable>(() => new InverseTable(this));
     }
 
     /// <summary>RR = 30: the last unit joins at 62 % of the maximal force.</summary>
@@ -82,29 +84,21 @@ public sealed class MotorUnitPool
         var force = 0.0;
         for (var unit = 0; unit < Units && thresholds[unit] <= excitation; unit++)
         {
-            var rate = Math.Min(peakRates[unit], LowestRate + excitation - thresholds[unit]);
-            force += twitches[unit] * Fusion(contractionSeconds[unit] * rate);
+            force += twitches[unit] * Fusion(contractionSeconds[unit] * RateAt(unit, excitation));
         }
 
         return force;
     }
 
-    /// <summary>The smallest excitation whose force reaches a share of the maximum, 0 to 1, to 1e-9.</summary>
-    public double ExcitationAt(double forceFraction)
-    {
-        var (low, high) = (0.0, HighestExcitation);
-        while (high - low > 1e-9)
-        {
-            var middle = (low + high) / 2;
-            (low, high) = ForceAt(middle) < forceFraction * MaximumForce ? (middle, high) : (low, middle);
-        }
+    /// <summary>The smallest excitation whose force reaches a share of the maximum, 0 to 1; by table, to 1e-4.</summary>
+    public double ExcitationAt(double forceFraction) => inverse.Value.At(forceFraction);
 
-        return high;
-    }
+    /// <summary>Impulses per second of a unit that is in, counted from 0.</summary>
+    internal double RateAt(int unit, double excitation) => Math.Min(peakRates[unit], LowestRate + excitation - thresholds[unit]);
 
     /// <summary>Force of a unit as a share of its twitch force at full fusion, over the normalised rate (contraction time times
     /// rate).</summary>
-    private static double Fusion(double normalisedRate)
+    internal static double Fusion(double normalisedRate)
     {
         const double Bend = 0.4;
         return normalisedRate <= Bend ? normalisedRate / Bend * Sigmoid(Bend) : Sigmoid(normalisedRate);

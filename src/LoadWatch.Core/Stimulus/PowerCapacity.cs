@@ -1,4 +1,5 @@
 using LoadWatch.People;
+using LoadWatch.Recordings;
 using NodaTime;
 
 namespace LoadWatch.Stimulus;
@@ -40,16 +41,18 @@ public sealed record PowerCapacity(Anchor Critical, Anchor? WPrime, Anchor? Maxi
         }
     }
 
+    public EnduranceLimits Limits => new(Critical, WPrime, Maximum, WattsPerUnit: 1);
+
     /// <summary>Null without a critical power.</summary>
-    public static PowerCapacity? On(LocalDate date, string person, AnchorBook anchors)
+    public static PowerCapacity? On(LocalDate date, string person, AnchorBook anchors, Sport sport)
     {
-        if (anchors.On(date, person, AnchorKind.CriticalPower) is not { Value: > 0 } critical)
+        if (anchors.On(date, person, AnchorKind.CriticalPower, sport) is not { Value: > 0 } critical)
         {
             return null;
         }
 
-        var wPrime = anchors.On(date, person, AnchorKind.WPrime) is { Value: > 0 } stated ? stated : null;
-        var recent = anchors.Since(date.PlusDays(-RecentDays), date, person, AnchorKind.PowerMax);
+        var wPrime = anchors.On(date, person, AnchorKind.WPrime, sport) is { Value: > 0 } stated ? stated : null;
+        var recent = anchors.Since(date.PlusDays(-RecentDays), date, person, AnchorKind.PowerMax, sport);
         var maximum = recent is not null && recent.Value >= LeastRatio * critical.Value ? recent : null;
         return new PowerCapacity(critical, wPrime, maximum, [.. Missing(recent, maximum, wPrime)]);
     }

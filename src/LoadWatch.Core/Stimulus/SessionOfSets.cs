@@ -1,3 +1,4 @@
+using LoadWatch.Activities;
 using LoadWatch.People;
 using LoadWatch.Recordings;
 using NodaTime;
@@ -13,29 +14,34 @@ public static class SessionOfSets
     /// <summary>More sets than anybody does in a session are not read.</summary>
     private const int MostSets = 500;
 
+    private static readonly HashSet<string> StandingAndStairs =
+        new(["chair_stand", "sit_to_stand", "chair_squat", "step_up", "step_down", "lateral_step", "stair_climb"], StringComparer.Ordinal);
+
     public static SessionStimulus Of(
         IReadOnlyList<StrengthSet> work,
         LocalDate date,
-        string person,
+        Person person,
         AnchorBook anchors,
-        IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> exercises)
+        ComputationSettings settings)
     {
-        var placed = work.Take(MostSets).Select(set => Place(set, SetDemand.Of(set, date, person, anchors), exercises)).ToList();
+        var exercises = settings.Exercises;
+        var placed = work.Take(MostSets).Select(set => Place(set, SetDemand.Of(set, date, person.Id, anchors, settings.Equations), exercises)).ToList();
         var unplaced = placed.FindAll(set => set.Regions.Count == 0);
         var notPlaced = NotPlaced(unplaced, work.Count - placed.Count).ToList();
         var elsewhere = unplaced.Count + work.Count - placed.Count;
+        var variants = Variants.Of(person.AgeOn(date));
         var regions = BodyRegions.All
             .Select(region => (Region: region, Sets: placed.FindAll(set => set.Regions.Contains(region))))
             .Where(group => group.Sets.Count + elsewhere > 0)
-            .Select(group => OfRegion(group.Region, group.Sets, elsewhere, notPlaced));
+            .Select(group => OfRegion(group.Region, group.Sets, elsewhere, notPlaced, variants));
         return new SessionStimulus([.. regions], notPlaced) { Questions = UnknownExercises.Of(work, exercises) };
     }
 
     /// <summary>Sets whose region is not known may have gone through this one.</summary>
-    private static RegionStimulus OfRegion(BodyRegion region, List<PlacedSet> sets, int elsewhere, List<string> notPlaced)
+    private static RegionStimulus OfRegion(BodyRegion region, List<PlacedSet> sets, int elsewhere, List<string> notPlaced, Variants variants)
     {
         var demands = Demands(sets);
-        return SetStimulus.Of(region, demands, sets.Count - demands.Count + elsewhere, [.. Missing(sets), .. notPlaced]);
+        return SetStimulus.Of(region, demands, sets.Count - demands.Count + elsewhere, [.. Missing(sets), .. NearMaximal(sets), .. notPlaced], variants);
     }
 
     private static PlacedSet Place(
@@ -49,6 +55,12 @@ public static class SessionOfSets
         .Where(set => set.Reading.Missing is not null)
         .GroupBy(set => (set.Exercise, set.Reading.Missing))
         .Select(group => $"{Counted(group.Count())} of {group.Key.Exercise}: no {group.Key.Missing}");
+
+    /// <summary>Of sets that could not be read: said where the exercise is one that may be near the maximum of a frail person.</summary>
+    private static IEnumerable<string> NearMaximal(IEnumerable<PlacedSet> sets) =>
+        sets.Any(set => set.Reading.Demand is null && StandingAndStairs.Contains(set.Exercise ?? ""))
+            ? ["chair stands, steps and stairs may be near the maximum of a frail person: a hardness or repetitions in reserve would tell"]
+            : [];
 
     private static IEnumerable<string> NotPlaced(List<PlacedSet> unplaced, int beyond) => unplaced
         .GroupBy(set => set.Exercise, StringComparer.Ordinal)

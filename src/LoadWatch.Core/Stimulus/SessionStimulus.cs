@@ -1,5 +1,4 @@
 using LoadWatch.Activities;
-using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Recordings;
 using NodaTime;
@@ -8,8 +7,7 @@ namespace LoadWatch.Stimulus;
 
 /// <summary>
 /// The stimulus of one recording by body region. Working sets speak for themselves; otherwise the sport says which regions the endurance
-/// channels
-/// speak for. Power beats heart rate; channels are never added.
+/// channels speak for. Moment by moment the best channel counts: power, on foot speed, and heart rate where they tell nothing. They are never added.
 /// </summary>
 /// <param name="Regions">Legs first; empty where the sport or the exercises name no region.</param>
 /// <param name="Remarks">In plain words.</param>
@@ -18,17 +16,17 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
     /// <summary>Exercises of working sets that no body region is known for, in canonical form: to be asked for once, over all people.</summary>
     public IReadOnlyList<string> Questions { get; init; } = [];
 
-    private const string NoChannel =
-        "nothing to read it from: power with critical_power, or heart rate with heart_rate_rest and heart_rate_max";
-
     public static SessionStimulus Of(
         UsableRecording usable, LocalDate date, Person person, AnchorBook anchors, ComputationSettings settings)
     {
         var work = usable.Recording.Sets.Where(set => set.Active).ToList();
         return work.Count > 0
-            ? SessionOfSets.Of(work, date, person.Id, anchors, settings.Exercises)
+            ? SessionOfSets.Of(work, date, person, anchors, settings)
             : OfSport(usable, date, person, anchors, settings.Sports);
     }
+
+    /// <summary>Where speed is a body's own running or walking, and power a watch's model of it.</summary>
+    internal static bool ReadsSpeed(Sport sport) => sport.IsOnFoot || sport.IsTeamSport;
 
     private static SessionStimulus OfSport(
         UsableRecording usable,
@@ -38,54 +36,21 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
         IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> sports)
     {
         var sport = usable.Recording.Sport;
-        if (SportRegions.Of(sport, sports) is not { } regions)
+        var power = ReadsSpeed(sport) ? null : PowerCapacity.On(date, person.Id, anchors, sport);
+        var speed = ReadsSpeed(sport) ? SpeedCapacity.On(date, person.Id, anchors) : null;
+        if (SportRegions.Of(sport, sports) is { } regions)
         {
-            var question = SportRegions.Question(sport);
-            return new SessionStimulus([.. BodyRegions.All.Select(region => EnduranceEstimate.Nothing.For(region, [question]))], [question]);
+            var notSeen = EnduranceRemarks.OfSession(usable, power, speed).ToList();
+            var estimate = EnduranceChannels.Of(usable, power, speed, date, person, anchors);
+            return new SessionStimulus([.. regions.Select(region => estimate.For(region, notSeen))], []);
         }
 
-        var capacity = sport.IsOnFoot ? null : PowerCapacity.On(date, person.Id, anchors);
-        var notSeen = NotRead(usable, capacity).ToList();
-        var estimate = Best(usable, capacity, date, person, anchors);
-        return new SessionStimulus([.. regions.Select(region => estimate.For(region, notSeen))], []);
-    }
-
-    private static EnduranceEstimate Best(
-        UsableRecording usable, PowerCapacity? capacity, LocalDate date, Person person, AnchorBook anchors)
-    {
-        if (usable[Channel.Power] is { } power && capacity is not null)
-        {
-            return PowerStimulus.Of(power, capacity);
-        }
-
-        return usable[Channel.HeartRate] is { } heartRate && HeartRateReserve.On(date, person, anchors).Reserve is { } reserve
-            ? HeartRateStimulus.Of(heartRate, HeartRateDrive.On(date, person.Id, anchors, reserve))
-            : EnduranceEstimate.Nothing with { NotSeen = [NoChannel] };
-    }
-
-    private static IEnumerable<string> NotRead(UsableRecording usable, PowerCapacity? capacity)
-    {
-        if (usable[Channel.Power] is not null)
-        {
-            if (capacity is null)
-            {
-                yield return usable.Recording.Sport.IsOnFoot
-                    ? "power on foot is a model of the watch and is not read"
-                    : "power: no critical_power to read it against";
-            }
-        }
-        else if (usable.Channels.ContainsKey(Channel.Power))
-        {
-            yield return "power: too little of it is usable";
-        }
-        else if (usable.Channels.ContainsKey(Channel.Speed))
-        {
-            yield return "speed is not read for stimulus: power with critical_power and power_max, or logged sets, would tell";
-        }
-
-        if (usable.Recording.Sport.Name is "running" or "walking" or "hiking")
-        {
-            yield return "downhill and other lengthening work: cheap in energy, heavy on the muscle";
-        }
+        var question = SportRegions.Question(sport);
+        var legs = usable[Channel.Speed] is not null && speed is not null
+            ? EnduranceChannels.Of(usable, power: null, speed, date, person, anchors)
+            : EnduranceEstimate.Nothing;
+        return new SessionStimulus(
+            [.. BodyRegions.All.Select(region => (region == BodyRegion.Legs ? legs : EnduranceEstimate.Nothing).For(region, [question]))],
+            [question]);
     }
 }

@@ -1,3 +1,5 @@
+using LoadWatch.Activities;
+using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Recordings;
 using NodaTime;
@@ -13,6 +15,9 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
 {
     /// <summary>What each repetition counts for, s; of a hold, the part of it that is read.</summary>
     public double SecondsEach { get; init; } = 1;
+
+    /// <summary>How many times the load a repetition counts that was declared fast.</summary>
+    public double FastFactor { get; init; } = 1;
 
     /// <summary>Whether the maximum of the exercise alone stood in for that of the machine.</summary>
     public bool IsMaximumBorrowed { get; init; }
@@ -32,7 +37,7 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
     /// <item>Otherwise unknown.</item>
     /// </list>
     /// </summary>
-    public static (SetDemand? Demand, string? Missing) Of(StrengthSet set, LocalDate date, string person, AnchorBook anchors)
+    public static (SetDemand? Demand, string? Missing) Of(StrengthSet set, LocalDate date, string person, AnchorBook anchors, EquationChoices equations)
     {
         var stated = new StatedSet(set);
         if (set.IsHold)
@@ -46,10 +51,10 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
         }
 
         var demand = stated.Kilograms is { } load && SetMaximum.Of(set, date, person, anchors) is { } maximum
-            ? FromMaximum(stated, repetitions, load, maximum)
+            ? FromMaximum(stated, repetitions, load, maximum, equations.FastLoadFactor)
             : set.IsFast
                 ? new SetDemand(repetitions, 0, 0, Reserve: null, Grade.D, SetRule.DeclaredFast)
-                : FromChart(stated, repetitions);
+                : FromRepetitions(stated, repetitions, equations.OneRepetitionMaxByRepetitions);
         return demand is null
             ? (null, $"{(stated.Kilograms is null ? "load" : "one_repetition_max")}, or repetitions in reserve up to 12 in all")
             : (demand with { SecondsEach = stated.RepetitionSeconds }, null);
@@ -66,7 +71,7 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
         return Rule switch
         {
             SetRule.Hold => [Math.Min(1, load)],
-            SetRule.Fast => Enumerable.Repeat(FastDrive.Of(load, variant), Repetitions),
+            SetRule.Fast => Enumerable.Repeat(FastDrive.Of(load, FastFactor, variant), Repetitions),
             SetRule.DeclaredFast => Enumerable.Repeat(FastDrive.Declared(variant), Repetitions),
             _ => Enumerable.Range(1, Repetitions).Select(repetition => StrengthDrive.Of(load, repetition, failing)),
         };
@@ -87,11 +92,11 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
             : (null, "hardness of the hold");
     }
 
-    private static SetDemand FromMaximum(StatedSet stated, int repetitions, double load, SetMaximum maximum)
+    private static SetDemand FromMaximum(StatedSet stated, int repetitions, double load, SetMaximum maximum, double fastFactor)
     {
         var share = load / maximum.Kilograms;
         var demand = stated.Set.IsFast && FastDrive.Applies(share)
-            ? new SetDemand(repetitions, share, maximum.RelativeError, Reserve: null, Grade.C, SetRule.Fast)
+            ? new SetDemand(repetitions, share, maximum.RelativeError, Reserve: null, Grade.C, SetRule.Fast) { FastFactor = fastFactor }
             : new SetDemand(repetitions, share, maximum.RelativeError, stated.Reserve, GradeOf(stated, maximum), SetRule.LoadAndMaximum);
         return demand with { IsMaximumBorrowed = !maximum.IsOfMachine };
     }
@@ -99,9 +104,9 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
     private static Grade GradeOf(StatedSet stated, SetMaximum maximum) =>
         maximum.IsFresh && stated.CountedReserve is not null ? Grade.A : Grade.B;
 
-    private static SetDemand? FromChart(StatedSet stated, int repetitions)
+    private static SetDemand? FromRepetitions(StatedSet stated, int repetitions, OneRepetitionMaxEquation equation)
     {
-        if (stated.Reserve is not { } left || LoadChart.Share(repetitions + left) is not { } share)
+        if (stated.Reserve is not { } left || equation.Share(repetitions + left) is not { } share)
         {
             return null;
         }

@@ -6,7 +6,7 @@ public enum SetRule
     /// <summary>Load over the anchored maximum; with a reserve repetition by repetition, without it a lower bound.</summary>
     LoadAndMaximum,
 
-    /// <summary>Load by the chart from repetitions done and in reserve.</summary>
+    /// <summary>Load by the chart, or the equation chosen instead, from repetitions done and in reserve.</summary>
     Chart,
 
     /// <summary>Declared fast, with load and maximum.</summary>

@@ -11,16 +11,16 @@ public static class SetStimulus
     /// <param name="unread">How many more working sets may have gone through the region and could not be read: then hard repetitions and bouts below the
     /// line of a heavy session are unknown, not few.</param>
     /// <param name="notSeen">What was missing in the others.</param>
-    public static RegionStimulus Of(BodyRegion region, IReadOnlyList<SetDemand> demands, int unread, IReadOnlyList<string> notSeen)
+    public static RegionStimulus Of(BodyRegion region, IReadOnlyList<SetDemand> demands, int unread, IReadOnlyList<string> notSeen, Variants variants)
     {
         if (demands.Count == 0)
         {
             return EnduranceEstimate.Nothing.For(region, notSeen);
         }
 
-        var low = Read(demands, Variant.Low);
-        var mid = Read(demands, Variant.Mid);
-        var high = Read(demands, Variant.High);
+        var low = Read(demands, variants.Low);
+        var mid = Read(demands, variants.Mid);
+        var high = Read(demands, variants.High);
         var isKnown = unread == 0 || HeavyOrFastLine.Reached(mid.HardBouts, mid.HardRepetitions, mid.HardSets);
         var hasHolds = demands.Any(demand => demand.Rule == SetRule.Hold);
         return new RegionStimulus(

@@ -4,6 +4,9 @@ namespace LoadWatch.Stimulus;
 public static class StimulusChannels
 {
     public const string Power = "power";
+
+    /// <summary>Running speed.</summary>
+    public const string Speed = "speed";
     public const string Sets = "sets";
     public const string HeartRate = "heart_rate";
 

@@ -1,65 +1,77 @@
-using LoadWatch.Activities;
-
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// What is left of W', the work above critical power. Source: Skiba, Chidnok, Vanhatalo and Jones 2012, Modeling the expenditure and
-/// reconstitution of work
-/// capacity above critical power, Med Sci Sports Exerc 44:1526-1532, integral form: W'bal(t) = W' - sum of W'exp(u) exp(-(t - u)/tau),
-/// tau = 546 exp(-0.01 D) + 316 s, D = critical power - mean power below it, W. Good to about 30 %.
-/// Departures: the sum is carried along, so that each sample costs the same; where no sample lies below critical power nothing recovers;
-/// time that no reading stands for (stops) recovers but does not spend.
+/// What is left of W' (or of D', metres above critical speed), moment by moment. Source: the differential form of Skiba et al. 2015, Eur J Appl Physiol
+/// 115:703-713, with the time constant of Weigend et al. 2022 (<see cref="WPrimeForm.Fitted"/>), which of the published forms is nearest to the published
+/// recoveries. X at or above X_c: W'bal falls by (X - X_c) dt. Below: what is spent shrinks by exp(-dt / tau(D)), D = X_c - X. Good to about 30 %.
+/// A moment's balance uses nothing that comes after it. Departures: 1 / tau is interpolated between whole watts; time that no reading stands for (stops,
+/// dropouts) recovers as rest does and does not spend.
+/// No form is published in speed: metres per second below critical speed are taken as the same share of 250 W (an assumption; the people whom the time
+/// constant comes from had a critical power of 248 W).
 /// </summary>
 public struct WPrimeBalance
 {
-    private readonly double criticalPowerWatts;
-    private readonly double wPrimeJoules;
-    private readonly double tau;
-    private readonly double decayOfSecond;
+    /// <summary>Critical power of the people whom the time constant was fitted to, W, rounded.</summary>
+    public const double FittedCriticalWatts = 250;
+
+    private const int TableWatts = 640;
+
+    private static readonly double[] Rates =
+        [.. Enumerable.Range(0, TableWatts + 2).Select(watts => 1 / WPrimeForm.FittedTau(Math.Min(watts, TableWatts)))];
+
+    private readonly double critical;
+    private readonly double whole;
+    private readonly double wattsPerUnit;
     private double spent;
-    private double spending;
+    private double recovering;
+    private double intensity;
+    private double standing;
     private long before;
 
-    /// <param name="power">All readings of the session; they are asked for one after the other.</param>
-    public WPrimeBalance(UsableChannel power, double criticalPowerWatts, double wPrimeJoules)
+    /// <param name="critical">X_c, above 0, W (or m/s).</param>
+    /// <param name="whole">W' (or D'), above 0, J (or m).</param>
+    /// <param name="wattsPerUnit">1 for power; what a unit of intensity below the critical one recovers like.</param>
+    public WPrimeBalance(double critical, double whole, double wattsPerUnit = 1)
     {
-        this.criticalPowerWatts = criticalPowerWatts;
-        this.wPrimeJoules = wPrimeJoules;
-        tau = MeanBelow(power, criticalPowerWatts) is { } mean ? Tau(criticalPowerWatts - mean) : double.PositiveInfinity;
-        decayOfSecond = Math.Exp(-1 / tau);
-        before = power.Count > 0 ? power.UnixMilliseconds[0] : 0;
+        (this.critical, this.whole, this.wattsPerUnit) = (critical, whole, wattsPerUnit);
+        intensity = critical;
     }
 
-    /// <summary>Seconds, for D in watts (0 or more).</summary>
-    public static double Tau(double belowCriticalWatts) => (546 * Math.Exp(-0.01 * belowCriticalWatts)) + 316;
+    /// <summary>The balance at the time of the reading gone on to, before its own work; below 0 when more was spent than the anchors allow.</summary>
+    public readonly double Left => whole - (recovering == 0 ? spent : spent * Math.Exp(-recovering));
 
-    /// <summary>The balance at the time of the next reading, before its own work, joules; below 0 when more was spent than the anchors
-    /// allow.</summary>
-    public double Next(long unixMilliseconds, double watts, double seconds)
+    /// <summary>Goes on to the next reading; times must not run backwards.</summary>
+    /// <param name="seconds">How long it stands for.</param>
+    public void Advance(long unixMilliseconds, double intensity, double seconds)
     {
-        var apart = unixMilliseconds - before;
-        var decay = apart == 1000 ? decayOfSecond : Math.Exp(-apart / 1000.0 / tau);
-        spent = (spent * decay) + spending;
-        spending = Math.Max(0, watts - criticalPowerWatts) * seconds;
-        before = unixMilliseconds;
-        return wPrimeJoules - spent;
+        Settle((unixMilliseconds - before) / 1000.0);
+        (before, this.intensity, standing) = (unixMilliseconds, intensity, seconds);
     }
 
-    private static double? MeanBelow(UsableChannel power, double criticalPowerWatts)
+    /// <summary>Lets the time since the reading before go by. Recovery is kept as a sum of dt / tau, so that its exponential is taken only where more is
+    /// spent behind it.</summary>
+    private void Settle(double apart)
     {
-        var values = power.Values;
-        var milliseconds = power.Milliseconds;
-        var (sum, seconds) = (0.0, 0.0);
-        for (var at = 0; at < values.Length && at < milliseconds.Length; at++)
+        if (intensity > critical)
         {
-            if (values[at] < criticalPowerWatts)
-            {
-                var apart = UsableSamples.Seconds(milliseconds[at]);
-                sum += values[at] * apart;
-                seconds += apart;
-            }
+            spent = (spent * Math.Exp(-recovering)) + ((intensity - critical) * standing);
+            recovering = 0;
+        }
+        else if (spent > 0)
+        {
+            recovering += standing * Rate((critical - intensity) * wattsPerUnit);
         }
 
-        return seconds > 0 ? sum / seconds : null;
+        if (spent > 0 && apart > standing)
+        {
+            recovering += (apart - standing) * Rate(critical * wattsPerUnit);
+        }
+    }
+
+    /// <summary>1 / tau, per second.</summary>
+    private static double Rate(double belowWatts)
+    {
+        var watts = unchecked((int)Math.Min(belowWatts, TableWatts));
+        return Rates[watts] + ((Math.Min(belowWatts, TableWatts) - watts) * (Rates[watts + 1] - Rates[watts]));
     }
 }

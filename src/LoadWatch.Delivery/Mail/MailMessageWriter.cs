@@ -7,7 +7,7 @@ using MimeKit.Text;
 namespace LoadWatch.Delivery.Mail;
 
 /// <summary>
-/// A notice as a mail: plain text and HTML side by side. The same notice, recipient and sender give the same bytes at every attempt, so a copy sent in
+/// A notice as a mail: plain text and HTML side by side, the pictures beside the HTML. The same notice, recipient and sender give the same bytes at every attempt, so a copy sent in
 /// doubt is known by its Message-ID (I-7).
 /// </summary>
 public static class MailMessageWriter
@@ -44,9 +44,26 @@ public static class MailMessageWriter
 
     private static MultipartAlternative Body(Notice notice, string digest)
     {
-        var body = new MultipartAlternative { Part(TextFormat.Plain, notice.MailText ?? notice.Text), Part(TextFormat.Html, notice.MailHtml ?? notice.Html) };
+        var pictures = new List<MimePart>();
+        var html = MailPictures.TakeOut(notice.MailHtml ?? notice.Html, digest, pictures);
+        var body = new MultipartAlternative { Part(TextFormat.Plain, notice.MailText ?? notice.Text), WithPictures(Part(TextFormat.Html, html), pictures, digest) };
         body.ContentType.Boundary = $"=_{digest}";
         return body;
+    }
+
+    private static MimeEntity WithPictures(TextPart html, List<MimePart> pictures, string digest)
+    {
+        if (pictures.Count == 0)
+        {
+            return html;
+        }
+
+        // RFC 2387: the part that the others belong to comes first.
+        var related = new MultipartRelated { html };
+        pictures.ForEach(related.Add);
+        related.ContentType.Boundary = $"=_{digest}_related";
+        related.ContentType.Parameters["type"] = "text/html";
+        return related;
     }
 
     // Fixed here, since the library would else choose by what the server offers.

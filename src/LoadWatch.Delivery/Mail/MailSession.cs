@@ -1,4 +1,3 @@
-using LoadWatch.Notices;
 using MailKit.Net.Smtp;
 using MailKit.Security;
 using MimeKit;

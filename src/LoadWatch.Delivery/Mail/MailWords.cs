@@ -1,4 +1,3 @@
-using LoadWatch.Notices;
 
 namespace LoadWatch.Delivery.Mail;
 

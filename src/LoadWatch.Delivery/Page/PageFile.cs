@@ -7,7 +7,7 @@ namespace LoadWatch.Delivery.Page;
 
 /// <summary>
 /// The page on disk: <c>ada.html</c> is always the newest, <c>ada-2026-03-01.html</c> the one of a decided notice. A reader meets the old page or the new
-/// one, never half of one: it is written aside and renamed. Only the page of a notice is flushed to the disk, since it counts as delivered; the newest one is
+/// one, never half of one: it is written aside and renamed. <c>ada~past.html</c> lists those that are there; no id can hold the tilde. Only the page of a notice is flushed to the disk, since it counts as delivered; the newest one is
 /// written again by the next sweep that follows a power cut.
 /// </summary>
 public sealed class PageFile(string folder) : INoticeChannel
@@ -30,13 +30,34 @@ public sealed class PageFile(string folder) : INoticeChannel
             {
                 Replace(Path.Combine(folder, notice.ContactId + ".html"), notice.Html, flush: false);
             }
+
+            WritePast(folder, notice.ContactId);
         });
     }
 
     /// <summary>Rewrites a contact's newest page.</summary>
-    public static ChannelOutcome Write(string folder, string contactId, string html) => IsFileName(contactId)
-        ? PrivateFolder.Use(folder, () => Replace(Path.Combine(folder, contactId + ".html"), html, flush: false), sync: false)
-        : NoFileName;
+    public static ChannelOutcome Write(string folder, string contactId, string html)
+    {
+        if (!IsFileName(contactId))
+        {
+            return NoFileName;
+        }
+
+        return PrivateFolder.Use(folder, sync: false, work: () =>
+        {
+            Replace(Path.Combine(folder, contactId + ".html"), html, flush: false);
+            if (!File.Exists(Path.Combine(folder, PastName(contactId))))
+            {
+                WritePast(folder, contactId);
+            }
+        });
+    }
+
+    /// <summary>Name of the list of a contact's pages.</summary>
+    internal static string PastName(string contactId) => $"{contactId}~past.html";
+
+    private static void WritePast(string folder, string contactId) =>
+        Replace(Path.Combine(folder, PastName(contactId)), PastPages.Render(folder, contactId), flush: false);
 
     private static ChannelOutcome NoFileName => ChannelOutcome.Failed(
         $"the contact's id cannot name a file: up to {NameAtMost} of the letters a to z, digits, dash, underscore and dot, "

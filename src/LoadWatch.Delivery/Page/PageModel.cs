@@ -8,6 +8,8 @@ internal sealed record PageModel(
     string Date,
     string? DataUpTo,
     string Contact,
+    string Past,
+    string FirstLine,
     string Headline,
     string? Lead,
     IReadOnlyList<PagePerson> Flagged,
@@ -19,29 +21,36 @@ internal sealed record PageModel(
     IReadOnlyList<ReadingNote> Terms,
     IReadOnlyList<string> Cautions)
 {
+    public IReadOnlyList<PageSheet> Sheets { get; init; } = [];
+
+    public PageCalls? Calls { get; init; }
+
+    public PageWeek? Week { get; init; }
+
     public static PageModel Of(Brief brief)
     {
-        var rows = brief.Groups
-            .SelectMany(group => group.Rows.Select(row => (Group: group, Row: row)))
-            .DistinctBy(pair => pair.Row.PersonId, StringComparer.Ordinal)
-            .ToDictionary(pair => pair.Row.PersonId, StringComparer.Ordinal);
         var (headline, lead) = Split(OneLine.Of(brief.FirstLine));
         return new PageModel(
             BriefText.DateInWords(brief.Date),
             brief.DataUpTo is { } upTo ? BriefText.DateInWords(upTo) : null,
             OneLine.Of(brief.ContactName),
+            PageFile.PastName(Uri.EscapeDataString(brief.ContactId)),
+            OneLine.Of(brief.FirstLine),
             headline,
             lead,
-            [.. brief.Flagged.Select(person => PagePerson.Of(person, StripOf(person.PersonId)))],
+            [.. brief.Flagged.Select(PagePerson.Of)],
             brief.FlaggedBeyond > 0 ? BriefText.Beyond(brief.FlaggedBeyond) : null,
             [.. brief.Returned.Select(Clean)],
             [.. brief.Changed.Select(Clean)],
             [.. brief.Questions.Select(Clean)],
             [.. brief.Groups.Select(PageGroup.Of)],
             ReadingNotes.Terms,
-            ReadingNotes.Cautions);
-
-        Strip? StripOf(string person) => rows.TryGetValue(person, out var at) ? Strip.Of(at.Row, at.Group.LoadUnit) : null;
+            ReadingNotes.Cautions)
+        {
+            Sheets = [.. brief.Sheets.Select(PageSheet.Of)],
+            Calls = PageCalls.Of(brief.Calls),
+            Week = PageWeek.Of(brief.Week),
+        };
     }
 
     /// <summary>The first sentence stands large, the others below it.</summary>
@@ -51,32 +60,21 @@ internal sealed record PageModel(
         return end < 0 ? (firstLine, null) : (firstLine[..(end + 1)], firstLine[(end + 2)..]);
     }
 
-    private static BriefLine Clean(BriefLine line) => new(OneLine.Of(line.Subject), OneLine.Sentence(line.Sentence));
+    internal static BriefLine Clean(BriefLine line) => new(OneLine.Of(line.Subject), OneLine.Sentence(line.Sentence));
 }
 
-/// <summary>One person to act on.</summary>
-internal sealed record PagePerson(string Name, string Severity, IReadOnlyList<PageReason> Reasons, string Decides, Strip? Strip)
+/// <summary>One person to act on: the parts of one sentence.</summary>
+/// <param name="Since"><c>new</c>, or since when; may be empty.</param>
+internal sealed record PagePerson(string Name, string Severity, string Since, string What, string Consider, string Decides, PagePicture? Picture)
 {
-    public static PagePerson Of(FlaggedPerson person, Strip? strip) => new(
+    public static PagePerson Of(FlaggedPerson person) => new(
         OneLine.Of(person.Name),
         BriefText.SeverityWord(person.Severity),
-        [.. person.Reasons.Select(PageReason.Of)],
-        OneLine.Of(BriefText.WhoDecides(person)),
-        strip);
-}
-
-/// <param name="Mark"><c>new</c>, <c>seen</c> or null.</param>
-internal sealed record PageReason(string Sentence, string Consider, string? Mark)
-{
-    public static PageReason Of(FlaggedReason reason) => new(
-        OneLine.Of(reason.Sentence),
-        OneLine.Of(reason.Consider),
-        (reason.IsNew, reason.IsSeen) switch
-        {
-            (true, _) => "new",
-            (_, true) => "seen",
-            _ => null,
-        });
+        person.Since,
+        OneLine.Of(person.What),
+        OneLine.Of(person.Consider),
+        OneLine.Of(person.Decides),
+        person.Picture is { } picture ? new PagePicture(picture) : null);
 }
 
 internal sealed record PageGroup(string Name, string Unit, string People, IReadOnlyList<PageRow> Rows)
@@ -105,7 +103,7 @@ internal sealed record PageRow(
     public static PageRow Of(BriefRow row, string unit) => new(
         OneLine.Of(row.Name),
         row.Flagged,
-        row.WeekLoad is null ? null : BriefNumbers.Load(row.WeekLoad),
+        row.WeekLoad is null ? null : BriefNumbers.SoFar(row),
         row.UsualWeekLoad is null ? null : BriefNumbers.Load(row.UsualWeekLoad),
         row.Ratio is null ? null : BriefNumbers.Ratio(row.Ratio),
         BriefNumbers.Count(row.KnownDays),

@@ -10,8 +10,7 @@ namespace LoadWatch.Delivery.Page;
 /// </summary>
 /// <param name="Width">Of the drawing; its height is 36.</param>
 /// <param name="UsualY">Height of the line of a usual day, or null.</param>
-/// <param name="Caption">Which days they are.</param>
-/// <param name="Words">The same for a reader who hears the page.</param>
+/// <param name="Words">What it shows, for a reader who hears the page.</param>
 public sealed record Strip(
     int Width,
     string Bars,
@@ -21,7 +20,6 @@ public sealed record Strip(
     string Heavy,
     string HeavyUnknown,
     string? UsualY,
-    string Caption,
     string Words)
 {
     private const int Pitch = 6;
@@ -44,7 +42,6 @@ public sealed record Strip(
             Draw(days, day => day.HeavyLegs == true, (_, x) => Diamond(x, 3)),
             Draw(days, day => day.HeavyLegs is null, (_, x) => Diamond(x, 2)),
             usualDay is { } usual && top > 0 ? Number(Baseline - Height(usual, top)) : null,
-            InShort(days, unit),
             InWords(days, unit));
     }
 
@@ -72,10 +69,6 @@ public sealed record Strip(
     private static string Diamond(int x, int radius) => $"M{x + 2} {DiamondY - radius}l{radius} {radius}l-{radius} {radius}l-{radius} -{radius}z";
 
     private static string Number(double value) => value.ToString("0.#", CultureInfo.InvariantCulture);
-
-    private static string InShort(IReadOnlyList<BriefDay> days, string unit) => days.Count == 0
-        ? "No days yet"
-        : $"{BriefNumbers.Day(days[0].Date)} to {BriefNumbers.Day(days[^1].Date)}, load in {OneLine.Of(unit)}";
 
     private static string InWords(IReadOnlyList<BriefDay> days, string unit)
     {

@@ -52,7 +52,7 @@ public static class Attribution
         .. devices.PeopleOf(serial)
             .Select(id => people.GetValueOrDefault(id))
             .OfType<Person>()
-            .Where(person => devices.On(serial, Activities.LocalStart.Of(recording, person).Date, session: null) == person.Id),
+            .Where(person => devices.On(serial, Activities.LocalStart.DateOf(recording, person), session: null) == person.Id),
     ];
 
     private static IReadOnlyList<string> ByFileName(IReadOnlyCollection<SeenName> names, WorkingConfiguration configuration)

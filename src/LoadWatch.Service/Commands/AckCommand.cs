@@ -1,6 +1,5 @@
 using System.CommandLine;
 using LoadWatch.Alerts;
-using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Explain;
 using LoadWatch.Service.Export;

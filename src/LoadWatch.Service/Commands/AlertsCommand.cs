@@ -1,7 +1,7 @@
 using System.CommandLine;
 using LoadWatch.Alerts;
-using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
+using LoadWatch.Service.Explain;
 using LoadWatch.Service.Export;
 
 namespace LoadWatch.Service.Commands;
@@ -52,13 +52,11 @@ public static class AlertsCommand
         foreach (var alert in alerts)
         {
             Console.Out.WriteLine(
-                $"{OneLine.Of(configuration.People[alert.Key.Person].Name)}: {Words.Of(alert.Severity)}, {Words.Of(alert.State)}{Shelved(alert)}, raised {Words.Date(alert.Raised)}");
+                $"{OneLine.Of(configuration.People[alert.Key.Person].Name)}: {Words.Of(alert.Severity)}, {Words.Of(alert.State)}{AlertWords.Aside(alert)}, raised {Words.Date(alert.Raised)}");
             Console.Out.WriteLine($"    {OneLine.Of(alert.Text)}");
             Console.Out.WriteLine($"    {alert.Id}");
         }
 
         Console.Out.WriteLine("loadwatch explain ID prints the numbers behind one.");
     }
-
-    private static string Shelved(Alert alert) => alert.ShelvedUntil is { } until ? $", shelved until {Words.Date(until)}" : "";
 }

@@ -3,7 +3,6 @@ using System.Security.Cryptography;
 using System.Text;
 using LoadWatch.Decoding;
 using LoadWatch.Decoding.Containers;
-using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;

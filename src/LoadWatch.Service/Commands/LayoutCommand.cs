@@ -1,7 +1,6 @@
 using System.CommandLine;
 using LoadWatch.Decoding;
 using LoadWatch.Decoding.Csv.Drafts;
-using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage.Files;

@@ -1,6 +1,5 @@
 using System.CommandLine;
 using LoadWatch.Days;
-using LoadWatch.Notices;
 using LoadWatch.People;
 using LoadWatch.Plans;
 using LoadWatch.Service.Export;
@@ -32,7 +31,7 @@ public static class PeopleCommand
             var plans = new PersonPlans(workplace.Configuration).Of(session);
             return workplace.Configuration.People.Values
                 .OrderBy(person => person.Id, StringComparer.Ordinal)
-                .Select(person => Line(person, LastDay.Of(session, person.Id), AbsenceOn(plans[person.Id], now.InZone(person.Zone).Date)))
+                .Select(person => Line(person, LastDay.Of(session, person.Id), AbsenceOn(plans[person.Id], PersonDay.On(now, person))))
                 .ToList();
         });
         if (json)

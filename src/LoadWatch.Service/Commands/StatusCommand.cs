@@ -1,7 +1,6 @@
 using System.CommandLine;
 using System.Data.Common;
 using System.Globalization;
-using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;

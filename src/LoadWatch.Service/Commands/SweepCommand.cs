@@ -1,5 +1,4 @@
 using System.CommandLine;
-using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Export;
 using LoadWatch.Service.Health;

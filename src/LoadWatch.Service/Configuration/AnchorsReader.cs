@@ -6,26 +6,28 @@ using NodaTime.Text;
 
 namespace LoadWatch.Service.Configuration;
 
-/// <summary>Reads <c>anchors.csv</c>: person, date, anchor, value, unit, source, exercise, machine. A blank date holds from the beginning, a blank source is measured.</summary>
+/// <summary>Reads <c>anchors.csv</c>: person, date, anchor, value, unit, source, exercise, machine, sport. A blank date holds from the beginning, a blank source is measured.</summary>
 public static class AnchorsReader
 {
     private static readonly string[] Required = ["person", "anchor", "value", "unit"];
-    private static readonly string[] Optional = ["date", "source", "exercise", "machine"];
+    private static readonly string[] Optional = ["date", "source", "exercise", "machine", "sport"];
 
     /// <param name="people">The roster, by id.</param>
     /// <param name="exercises">Exercises whose body region is known.</param>
+    /// <param name="sports">Sports whose body regions are known.</param>
     /// <exception cref="ConfigurationException">Names every fault.</exception>
     public static IReadOnlyList<Anchor> Read(
-        string path, string name, IReadOnlyDictionary<string, Person> people, IReadOnlyCollection<string> exercises)
+        string path, string name, IReadOnlyDictionary<string, Person> people, IReadOnlyCollection<string> exercises, IEnumerable<string> sports)
     {
+        var families = sports.Select(Sport.Parse).Where(sport => !sport.IsOnFoot).Select(sport => sport.Family).Where(family => family != "running").Distinct(StringComparer.Ordinal).ToList();
         var table = TableFile.Read(path, name, Required, Optional);
         var faults = new List<ConfigurationFault>();
-        var anchors = table.Rows.Select(row => ReadRow(row, people, exercises, faults)).OfType<Anchor>().ToList();
+        var anchors = table.Rows.Select(row => ReadRow(row, people, exercises, families, faults)).OfType<Anchor>().ToList();
         return faults.Count == 0 ? anchors : throw new ConfigurationException(faults);
     }
 
     private static Anchor? ReadRow(
-        TableRow row, IReadOnlyDictionary<string, Person> people, IReadOnlyCollection<string> exercises, List<ConfigurationFault> faults)
+        TableRow row, IReadOnlyDictionary<string, Person> people, IReadOnlyCollection<string> exercises, IReadOnlyCollection<string> families, List<ConfigurationFault> faults)
     {
         var before = faults.Count;
         var person = PersonOf(row, people, faults);
@@ -40,7 +42,8 @@ public static class AnchorsReader
         var value = ValueOf(row, kind, faults);
         var exercise = ExerciseOf(row, kind, exercises, faults);
         var machine = MachineOf(row, kind, faults);
-        return faults.Count > before ? null : new Anchor(person.Id, date, kind.Kind, value, source, exercise, Machine: machine);
+        var sport = SportOf(row, kind, families, faults);
+        return faults.Count > before ? null : new Anchor(person.Id, date, kind.Kind, value, source, exercise, Machine: machine) { Sport = sport };
     }
 
     private static Person? PersonOf(TableRow row, IReadOnlyDictionary<string, Person> people, List<ConfigurationFault> faults)
@@ -142,5 +145,25 @@ public static class AnchorsReader
         }
 
         return machine;
+    }
+
+    /// <summary>The family's word: <c>rowing</c> is also the machine's.</summary>
+    private static string? SportOf(TableRow row, AnchorKindInfo kind, IReadOnlyCollection<string> families, List<ConfigurationFault> faults)
+    {
+        if (row["sport"]?.ToLowerInvariant() is not { } word)
+        {
+            return null;
+        }
+
+        if (!AnchorKinds.IsOfSport(kind.Kind))
+        {
+            faults.Add(row.Fault($"sport: only critical_power, w_prime and power_max are of a sport, not {kind.Name}"));
+        }
+        else if (!families.Contains(word))
+        {
+            faults.Add(row.Fault($"sport: \"{word}\" is not a sport in which power is read, such as cycling or rowing{Nearest.Hint(word, families)}"));
+        }
+
+        return word;
     }
 }

@@ -10,6 +10,7 @@ using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Stimulus;
 using NodaTime;
+using NodaTime.Text;
 
 namespace LoadWatch.Service.Configuration;
 
@@ -42,6 +43,7 @@ public sealed class ConfigurationReader
         {
             UsableShareWanted = file.Computation.UsableShareWanted,
             Quality = file.Computation.Quality,
+            Equations = file.Computation.Equations,
             HeartRateReserveBounds = Ascending(file.Computation.HeartRateReserveBounds, "$.computation.heart_rate_reserve_bounds"),
             PowerBounds = Ascending(file.Computation.PowerBounds, "$.computation.power_bounds"),
             SpeedBounds = Ascending(file.Computation.SpeedBounds, "$.computation.speed_bounds"),
@@ -55,12 +57,17 @@ public sealed class ConfigurationReader
         faults.Stop();
 
         var roster = faults.Collect(() => RosterReader.Read(Resolve(file.Roster), file.Roster, groups.Keys.ToList(), zone));
-        var people = (roster ?? []).ToDictionary(person => person.Id, StringComparer.OrdinalIgnoreCase);
-        var anchors = faults.Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList()));
+        var people = (roster ?? []).ToDictionary(
+            person => person.Id,
+            person => groups.TryGetValue(person.Group, out var group) ? person with { DayBeginsAt = group.DayBeginsAt } : person,
+            StringComparer.OrdinalIgnoreCase);
+        var anchors = faults.Collect(() => roster is null ? [] : AnchorsReader.Read(Resolve(file.Anchors), file.Anchors, people, exercises.Keys.ToList(), computation.Sports.Keys));
         var devices = faults.Collect(() => roster is null || !HasDevices(file) ? DeviceBook.Empty : DevicesReader.Read(Resolve(file.Devices), file.Devices, people));
+        var limits = LimitsOfPeople(json, file, people, roster is not null);
         var contacts = ContactsReader.Read(file, groups, roster is null ? null : people, zone, faults);
         var administrators = AdministratorsReader.Read(file, zone, faults);
         var mail = new MailReader(Resolve, faults.Add).Read(file);
+        var webhook = new WebhookReader(Resolve, faults.Add).Read(file);
         faults.Stop();
 
         var (hash, text) = Version(json, file);
@@ -74,7 +81,7 @@ public sealed class ConfigurationReader
             people,
             groups,
             contacts,
-            new AnchorBook(anchors!),
+            new AnchorBook(anchors!) { HeartRateMaxEquation = computation.Equations.HeartRateMaxByAge },
             inboxes,
             [.. file.Layouts, .. BuiltInLayouts.All],
             computation,
@@ -85,7 +92,10 @@ public sealed class ConfigurationReader
             AllowNetworkDataFolder = file.AllowNetworkDataFolder,
             Administrators = administrators,
             Mail = mail,
+            Webhook = webhook,
             Devices = devices!,
+            CommonLimits = file.Limits,
+            LimitsOfPeople = limits,
             Subjects = new Subjects(people, groups, devices!),
         };
     }
@@ -139,6 +149,7 @@ public sealed class ConfigurationReader
             var group = new Group(entry.Id, entry.Name.Length > 0 ? entry.Name : entry.Id, entry.LoadQuantity, limits[i])
             {
                 LoadFallbacks = entry.LoadFallbacks,
+                DayBeginsAt = LocalTimePattern.CreateWithInvariantCulture("HH:mm").Parse(entry.DayBeginsAt).Value,
             };
             if (!groups.TryAdd(entry.Id, group))
             {
@@ -147,6 +158,29 @@ public sealed class ConfigurationReader
         }
 
         return groups;
+    }
+
+    private IReadOnlyDictionary<string, RuleLimits> LimitsOfPeople(byte[] json, LoadWatchFile file, Dictionary<string, Person> people, bool known)
+    {
+        foreach (var id in file.People.Keys.Where(id => known && !people.ContainsKey(id)))
+        {
+            faults.Add($"$.people.{id}", $"\"{id}\" is not in the roster{Nearest.Hint(id, people.Keys)}");
+        }
+
+        foreach (var twice in file.People.Keys.GroupBy(id => id, StringComparer.OrdinalIgnoreCase).Where(same => same.Count() > 1))
+        {
+            faults.Add($"$.people.{twice.Last()}", $"the person \"{twice.Key}\" stands above already");
+            return new Dictionary<string, RuleLimits>();
+        }
+
+        using var document = JsonDocument.Parse(json, ConfigurationJson.DocumentOptions);
+        var limits = LimitsMerge.OfPeople(document.RootElement, id => people.GetValueOrDefault(id)?.Group);
+        foreach (var (id, own) in limits)
+        {
+            CheckLimits(own, $"$.people.{id}.limits");
+        }
+
+        return limits;
     }
 
     private void CheckLoad(GroupEntry entry, IReadOnlyList<string> known, string at)

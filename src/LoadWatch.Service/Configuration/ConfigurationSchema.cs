@@ -66,8 +66,8 @@ public static class ConfigurationSchema
         return schema;
     }
 
-    /// <summary>What a group's limits leave out is taken from the common limits, not from a default.</summary>
-    private static bool IsOfGroup(ReadOnlySpan<string> path) => path.Contains("groups") && path.Contains("limits");
+    /// <summary>What the limits of a group or a person leave out is taken from wider ones, not from a default.</summary>
+    private static bool IsOfGroup(ReadOnlySpan<string> path) => (path.Contains("groups") || path.Contains("people")) && path.Contains("limits");
 
     private static void AddRules(JsonObject schema, PropertyInfo property)
     {

@@ -1,3 +1,4 @@
+using LoadWatch.Notices;
 using LoadWatch.People;
 using NodaTime;
 using NodaTime.Text;
@@ -40,6 +41,7 @@ internal static class ContactsReader
                 LocalTimePattern.CreateWithInvariantCulture("HH:mm").Parse(entry.BriefAt).Value,
                 entry.BriefDays.ToHashSet())
             {
+                Forms = entry.Forms.Count > 0 ? [.. entry.Forms.Distinct().Order()] : BriefForms.Usual(entry.Role, entry.BriefDays.Distinct().Count()),
                 Mail = entry.Mail.Length > 0 ? entry.Mail : null,
                 Names = entry.Names,
             });

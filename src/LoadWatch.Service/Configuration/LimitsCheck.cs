@@ -13,7 +13,8 @@ public static class LimitsCheck
         Pairs(limits).Where(pair => pair.Low > pair.High).Select(pair => (pair.Path, pair.Reason))
             .Concat(Names("load_ratio", limits.LoadRatio.Quantities))
             .Concat(Names("weekly_jump", limits.WeeklyJump.Quantities))
-            .Concat(Names("falling_load", limits.FallingLoad.Quantities));
+            .Concat(Names("falling_load", limits.FallingLoad.Quantities))
+            .Concat(Tests(limits.TestOverdue.Tests));
 
     private static IEnumerable<Pair> Pairs(RuleLimits limits) =>
     [
@@ -24,12 +25,15 @@ public static class LimitsCheck
         AtLeast("session_spike.load_warning", limits.SessionSpike.LoadWarning, "load_notice", limits.SessionSpike.LoadNotice),
         AtMost("monotony.return", limits.Monotony.Return, "raise", limits.Monotony.Raise),
         AtMost("monotony.strains_wanted", limits.Monotony.StrainsWanted, "look_back_days", limits.Monotony.LookBackDays),
+        AtMost("hard_days.return_factor", limits.HardDays.ReturnFactor, "median_factor", limits.HardDays.MedianFactor),
         AtMost("hard_days.training_days_wanted", limits.HardDays.TrainingDaysWanted, "look_back_days", limits.HardDays.LookBackDays),
         AtMost("hard_days.matches", limits.HardDays.Matches, "match_days", limits.HardDays.MatchDays),
+        Below("hard_days.matches_return", limits.HardDays.MatchesReturn, "matches", limits.HardDays.Matches),
         AtMost("falling_load.warning", limits.FallingLoad.Warning, "notice", limits.FallingLoad.Notice),
         AtLeast("falling_load.return", limits.FallingLoad.Return, "notice", limits.FallingLoad.Notice),
         AtMost("falling_load.weeks_wanted", limits.FallingLoad.WeeksWanted, "weeks", limits.FallingLoad.Weeks),
         AtLeast("stimulus_gap.warning_days", limits.StimulusGap.WarningDays, "notice_days", limits.StimulusGap.NoticeDays),
+        Below("not_usable.return_sessions", limits.NotUsable.ReturnSessions, "sessions", limits.NotUsable.Sessions),
         new("silence.gaps_wanted", limits.Silence.GapsWanted, limits.Silence.LookBackDays, FormattableString.Invariant(
             $"{limits.Silence.GapsWanted} gaps never fit in look_back_days, which is {limits.Silence.LookBackDays}")),
     ];
@@ -37,8 +41,16 @@ public static class LimitsCheck
     private static Pair AtMost(string path, double value, string other, double bound) =>
         new(path, value, bound, FormattableString.Invariant($"{value} is above {other}, which is {bound}"));
 
+    private static Pair Below(string path, int value, string other, int bound) =>
+        new(path, value, bound - 1, FormattableString.Invariant($"{value} is not below {other}, which is {bound}"));
+
     private static Pair AtLeast(string path, double value, string other, double bound) =>
         new(path, bound, value, FormattableString.Invariant($"{value} is below {other}, which is {bound}"));
+
+    private static IEnumerable<(string Path, string Reason)> Tests(IReadOnlyList<string> tests) => tests
+        .Select((word, place) => (word, place))
+        .Where(test => FunctionTests.Of(test.word) is null)
+        .Select(test => ($"test_overdue.tests[{test.place}]", $"\"{test.word}\" is not a function test{Nearest.Hint(test.word, FunctionTests.All.Select(known => known.Word))}"));
 
     private static IEnumerable<(string Path, string Reason)> Names(string rule, IReadOnlyList<string> quantities)
     {

@@ -1,5 +1,6 @@
 using System.ComponentModel.DataAnnotations;
 using System.Text.Json.Serialization;
+using LoadWatch.Activities;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
 using LoadWatch.People;
@@ -47,6 +48,9 @@ public sealed record LoadWatchFile
     /// <summary>Squads and classes.</summary>
     public IReadOnlyList<GroupEntry> Groups { get; init; } = [new GroupEntry()];
 
+    /// <summary>What differs for single people from their group, by the person's id in the roster.</summary>
+    public IReadOnlyDictionary<string, PersonEntry> People { get; init; } = new Dictionary<string, PersonEntry>();
+
     /// <summary>Who is told.</summary>
     public IReadOnlyList<ContactEntry> Contacts { get; init; } = [new ContactEntry()];
 
@@ -55,6 +59,9 @@ public sealed record LoadWatchFile
 
     /// <summary>The server that takes mail.</summary>
     public MailEntry Mail { get; init; } = new();
+
+    /// <summary>How notices are posted to chat or ticket systems.</summary>
+    public WebhookEntry Webhook { get; init; } = new();
 
     /// <summary>CSV layouts beside the built-in ones; the header picks the layout.</summary>
     public IReadOnlyList<CsvLayout> Layouts { get; init; } = [];
@@ -109,6 +116,9 @@ public sealed record GroupEntry
     /// <summary>The name that briefs show; blank shows the id.</summary>
     public string Name { get; init; } = "";
 
+    /// <summary>What it is: in a <c>clinic</c> the rules of monotony and of hard days are off, unless its own limits turn them on.</summary>
+    public GroupKind Kind { get; init; } = GroupKind.Squad;
+
     /// <summary>
     /// The quantity that is this group's load: banister_trimp, edwards_load, lucia_load, stagno_load, individual_trimp, foster_load, minutes, distance,
     /// distance_above_5_5_m_s, distance_above_7_m_s (of the speed bounds from 5.5 on), distance_above_80_percent_speed_max,
@@ -122,7 +132,24 @@ public sealed record GroupEntry
     /// </summary>
     public IReadOnlyList<string> LoadFallbacks { get; init; } = [];
 
+    /// <summary>Local time at which a day begins, 00:00 to 12:00: sessions that begin before it count for the date before.</summary>
+    [RegularExpression("^(0[0-9]|1[01]):[0-5][0-9]$|^12:00$", ErrorMessage = "is not a time from 00:00 to 12:00")]
+    public string DayBeginsAt { get; init; } = "00:00";
+
     /// <summary>Limits that differ from the common ones; only the keys that differ.</summary>
+    public RuleLimits? Limits { get; init; }
+}
+
+public enum GroupKind
+{
+    Squad,
+    Clinic,
+}
+
+/// <summary>What differs for one person.</summary>
+public sealed record PersonEntry
+{
+    /// <summary>Limits that differ from those of the person's group; only the keys that differ.</summary>
     public RuleLimits? Limits { get; init; }
 }
 
@@ -157,13 +184,22 @@ public sealed record ContactEntry
         IsoDayOfWeek.Friday, IsoDayOfWeek.Saturday, IsoDayOfWeek.Sunday,
     ];
 
+    /// <summary>
+    /// What the brief holds: <c>daily</c> (who is to be looked at, and the groups), <c>weekly</c> (the week; with the first brief of a week), <c>call_list</c>
+    /// (whom to call; with the first brief of a week), <c>class_sheet</c> (who is planned today, to print); empty: as usual for the role and the days.
+    /// </summary>
+    public IReadOnlyList<BriefForm> Forms { get; init; } = [];
+
     /// <summary>IANA zone; blank takes the common one.</summary>
     public string TimeZone { get; init; } = "";
 
     /// <summary>Address for mail; blank for none.</summary>
     public string Mail { get; init; } = "";
 
-    /// <summary>How mail names the people: <c>full</c>, <c>initials</c>, or <c>none</c> (counts only). Page and notice file name them in full.</summary>
+    /// <summary>Address of a chat or ticket system that notices are posted to, https; blank for none.</summary>
+    public string Webhook { get; init; } = "";
+
+    /// <summary>How mail and webhook name the people: <c>full</c>, <c>initials</c>, or <c>none</c> (counts only). Page and notice file name them in full.</summary>
     public NamesShown Names { get; init; } = NamesShown.Full;
 }
 
@@ -195,6 +231,9 @@ public sealed record ComputationEntry
 
     /// <summary>From when on a heart rate is no reading of the person.</summary>
     public QualityLimits Quality { get; init; } = new();
+
+    /// <summary>Which published equations are used, and their constants from memory.</summary>
+    public EquationChoices Equations { get; init; } = new();
 
     /// <summary>Inner bounds of the heart-rate zones, fractions of heart-rate reserve, where thresholds are not anchored.</summary>
     public IReadOnlyList<double> HeartRateReserveBounds { get; init; } = [0.30, 0.40, 0.60, 0.90];

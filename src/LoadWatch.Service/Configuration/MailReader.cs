@@ -32,7 +32,7 @@ internal sealed class MailReader(Func<string, string> resolve, Action<string, st
             Security = entry.Security,
             From = entry.From,
             User = entry.User,
-            Password = secret.Password,
+            Password = secret.Value,
             PasswordMissing = secret.Missing,
             CertificateAuthorityFile = entry.CertificateAuthorityFile.Length > 0 ? resolve(entry.CertificateAuthorityFile) : null,
             Timeout = TimeSpan.FromSeconds(entry.TimeoutSeconds),

@@ -3,6 +3,7 @@ using System.ComponentModel.DataAnnotations;
 using System.Reflection;
 using System.Text.Json;
 using System.Text.Json.Serialization;
+using LoadWatch.Activities;
 
 namespace LoadWatch.Service.Configuration;
 
@@ -38,7 +39,7 @@ public static class RangeCheck
     private static IEnumerable<(string Path, string Reason)> Inner(object inner, string path) => inner switch
     {
         string => [],
-        IDictionary => [],
+        IDictionary entries => entries.Keys.Cast<object>().SelectMany(key => entries[key] is { } entry && IsOurs(entry) ? Faults(entry, $"{path}.{key}") : []),
         IEnumerable list => list.Cast<object>().SelectMany((item, i) => IsOurs(item) ? Faults(item, $"{path}[{i}]") : []),
         _ => IsOurs(inner) ? Faults(inner, path) : [],
     };
@@ -49,6 +50,7 @@ public static class RangeCheck
     private static string Reason(ValidationAttribute rule, object value) => rule switch
     {
         RangeAttribute range => FormattableString.Invariant($"{value} is outside {range.Minimum} to {range.Maximum}"),
+        NumbersAttribute numbers => numbers.Wanted,
         RequiredAttribute => "may not be blank",
         _ => FormattableString.Invariant($"\"{value}\" {rule.ErrorMessage}"),
     };

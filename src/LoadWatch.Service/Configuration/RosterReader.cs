@@ -2,7 +2,6 @@ using System.Globalization;
 using System.Text.RegularExpressions;
 using LoadWatch.People;
 using NodaTime;
-using NodaTime.Text;
 
 namespace LoadWatch.Service.Configuration;
 
@@ -49,7 +48,7 @@ public static partial class RosterReader
         return new Person(id, row["name"] ?? id, group, BirthYear(row, faults), SexOf(row, faults), ZoneOf(row, zone, faults))
         {
             Aliases = Aliases(row),
-            HeartRateInvalidFrom = HeartRateInvalidFrom(row, faults),
+            HeartRateInvalid = HeartRateCell.Read(row, faults),
         };
     }
 
@@ -71,28 +70,6 @@ public static partial class RosterReader
             {
                 yield return row.Fault($"aliases: \"{alias}\" already means {taken[alias]}");
             }
-        }
-    }
-
-    /// <summary>The fault does not repeat what stands there: a reason belongs nowhere, not even in a log.</summary>
-    private static LocalDate? HeartRateInvalidFrom(TableRow row, List<ConfigurationFault> faults)
-    {
-        const string Since = "no since ";
-        var text = (row["heart_rate_valid"] ?? "yes").ToLowerInvariant();
-        switch (text)
-        {
-            case "yes":
-                return null;
-            case "no":
-                return LocalDate.MinIsoValue;
-            default:
-                if (text.StartsWith(Since, StringComparison.Ordinal) && LocalDatePattern.Iso.Parse(text[Since.Length..].Trim()) is { Success: true, Value: var from })
-                {
-                    return from;
-                }
-
-                faults.Add(row.Fault("heart_rate_valid: holds yes, no, or no since 2026-03-01, and never a reason"));
-                return null;
         }
     }
 

@@ -1,6 +1,8 @@
 using LoadWatch.Activities;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Delivery.Mail;
+using LoadWatch.Delivery.Webhook;
+using LoadWatch.Findings;
 using LoadWatch.People;
 using LoadWatch.Service.Arrivals;
 using NodaTime;
@@ -34,6 +36,9 @@ public sealed record WorkingConfiguration(
     /// <summary>The mail server; null when there is none.</summary>
     public MailSettings? Mail { get; init; }
 
+    /// <summary>Where notices are posted to; null when nowhere.</summary>
+    public WebhookSettings? Webhook { get; init; }
+
     /// <summary>Whether the data folder may lie on a network file system.</summary>
     public bool AllowNetworkDataFolder { get; init; }
 
@@ -45,6 +50,16 @@ public sealed record WorkingConfiguration(
 
     /// <summary>Finds people and groups by how they are written.</summary>
     public required Subjects Subjects { get; init; }
+
+    /// <summary>Limits of groups that set none of their own.</summary>
+    public RuleLimits CommonLimits { get; init; } = new();
+
+    /// <summary>Limits of single people, by id compared without regard to case; who is not among them has those of the group.</summary>
+    public IReadOnlyDictionary<string, RuleLimits> LimitsOfPeople { get; init; } = new Dictionary<string, RuleLimits>();
+
+    /// <summary>A person's group, with the limits that are in force for the person.</summary>
+    public Group GroupOf(Person person) =>
+        LimitsOfPeople.GetValueOrDefault(person.Id) is { } own ? Groups[person.Group] with { Limits = own } : Groups[person.Group];
 
     /// <summary>Whether files that were cut off are used of any of these inboxes.</summary>
     public bool Salvages(IEnumerable<string> inboxes) => Inboxes.Any(inbox => inbox.Salvage && inboxes.Contains(inbox.Name, StringComparer.Ordinal));

@@ -58,7 +58,7 @@ internal static class DemoConfiguration
     {
         var person = demo.Person;
         var sex = person.Sex == Sex.Female ? "f" : "m";
-        return string.Create(CultureInfo.InvariantCulture, $"{person.Id},{person.Name},{person.Group},{person.BirthYear},{sex},,{string.Join(';', person.Aliases)},{(person.HeartRateInvalidFrom is null ? "" : "no")}");
+        return string.Create(CultureInfo.InvariantCulture, $"{person.Id},{person.Name},{person.Group},{person.BirthYear},{sex},,{string.Join(';', person.Aliases)},{(person.HeartRateInvalid.IsEmpty ? "" : "no")}");
     }
 
     private static string Anchor(Anchor anchor)

@@ -36,7 +36,7 @@ public sealed record DemoPerson(DemoPart Part, Person Person, Device Device, IRe
         var person = new Person(part.Id, part.Name, part.Group, until.Year - part.Age, part.Sex, Zone)
         {
             Aliases = ShortNames.Contains(part.Id) ? [Shortened(part.Name)] : [],
-            HeartRateInvalidFrom = part.Id == WithoutHeartRate ? LocalDate.MinIsoValue : null,
+            HeartRateInvalid = part.Id == WithoutHeartRate ? DatePeriods.Always : DatePeriods.Never,
         };
         var first = until.PlusDays(-DemoTimeline.Days);
         var anchors = DemoAnchors.Of(part, random, first).ToList();

@@ -2,7 +2,6 @@ using System.Globalization;
 using System.Text;
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
-using LoadWatch.Notices;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Decisions;
@@ -23,7 +22,7 @@ public static class AlertExplanation
     {
         var text = new StringBuilder();
         text.AppendLine(CultureInfo.InvariantCulture, $"{OneLine.Of(alert.Text)}");
-        text.AppendLine(CultureInfo.InvariantCulture, $"{Words.Of(alert.Severity)}, {Words.Of(alert.State)}{(alert.ShelvedUntil is { } until ? $", shelved until {Words.Date(until)}" : "")}, raised {Words.Date(alert.Raised)}");
+        text.AppendLine(CultureInfo.InvariantCulture, $"{Words.Of(alert.Severity)}, {Words.Of(alert.State)}{AlertWords.Aside(alert)}, raised {Words.Date(alert.Raised)}");
         foreach (var decision in decisions)
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"{DecisionText.Sentence(decision, decisions)}");

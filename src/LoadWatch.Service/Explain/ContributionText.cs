@@ -1,6 +1,5 @@
 using System.Globalization;
 using LoadWatch.Activities;
-using LoadWatch.Notices;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Activities;
 using NodaTime;

@@ -2,6 +2,7 @@ using System.Globalization;
 using System.Text;
 using LoadWatch.Activities;
 using LoadWatch.Days;
+using LoadWatch.Findings;
 using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
@@ -36,10 +37,19 @@ public static class DayExplanation
 
         text.AppendLine(CultureInfo.InvariantCulture, $"{OneLine.Of(known.Name)}, {Words.Date(day.Date)}: {Words.Of(day.State)}{(day.StateSource is { } source ? $" ({source})" : "")}");
         AppendDecisions(text, session, known.Id, day.Date);
-        AppendTrends(text, day, configuration.Groups[known.Group].LoadQuantity);
-        ReferenceExplanation.Append(text, known, configuration.Groups[known.Group], TableBasis.Of(configuration, session).AnchorsOf(known), day.Date);
+        var basis = TableBasis.Of(configuration, session);
+        foreach (var quiet in NotWatched.Of(session.Days.OfPerson(known.Id, day.Date.PlusDays(-LoadCalendar.LookBackDays), day.Date), configuration.GroupOf(known).Limits))
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {quiet.Sentence(day.Date)}");
+        }
+
+        AppendTrends(text, day, configuration.GroupOf(known).LoadQuantity);
+        DayTrendText.Append(text, day, session.Days.Before(known.Id, day.Date.PlusDays(1), day.Date));
+        RoomText.Append(text, new TodaysLimits(configuration, basis), session, known, date is null ? [day.Date, day.Date.PlusDays(1)] : [day.Date]);
+        ReferenceExplanation.Append(text, known, configuration.GroupOf(known), basis, day.Date);
+        ReferenceExplanation.AppendObserved(text, known, basis, day.Date);
         var recorded = session.Activities.OfPerson(known.Id, day.Date, day.Date).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
-        foreach (var activity in PersonTraining.Of(session, configuration, TableBasis.Of(configuration, session), known, day.Date, day.Date).Activities)
+        foreach (var activity in PersonTraining.Of(session, configuration, basis, known, day.Date, day.Date).Activities)
         {
             AppendActivity(text, session, activity, recorded.GetValueOrDefault(activity.Key));
         }
@@ -47,7 +57,7 @@ public static class DayExplanation
         foreach (var finding in session.Findings.OfPerson(known.Id, day.Date, day.Date))
         {
             text.AppendLine();
-            text.AppendLine(CultureInfo.InvariantCulture, $"finding {finding.Rule}: {OneLine.Of(finding.Text)}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"finding {finding.Rule} ({Words.Of(finding.Severity)}): {OneLine.Of(finding.Text)}");
             AlertExplanation.Append(text, finding.Evidence);
         }
 
@@ -90,11 +100,6 @@ public static class DayExplanation
         Line(text, "strain = week x monotony (Foster 1998)", day.Strain);
         Line(text, "share of 7 days with known load", day.Coverage7);
         Line(text, "share of 28 days with known load", day.Coverage28);
-        foreach (var (region, state) in day.Regions.OrderBy(pair => pair.Key))
-        {
-            var heavy = state.HeavyOrFast switch { true => "yes", false => "no", null => "unknown" };
-            text.AppendLine(CultureInfo.InvariantCulture, $"    {BodyRegions.Word(region)}: heavy or fast {heavy}, days since {Number(state.DaysSince)}, in 28 days {Number(state.Days28)}, usual gap in days {Number(state.UsualGapDays)}");
-        }
     }
 
     private static void AppendActivity(StringBuilder text, StoreSession session, JoinedActivity activity, StoredActivity? recorded)

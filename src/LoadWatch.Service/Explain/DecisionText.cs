@@ -1,4 +1,3 @@
-using LoadWatch.Notices;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage.Decisions;
 

@@ -1,7 +1,6 @@
 using System.Globalization;
 using System.Text;
 using LoadWatch.Activities;
-using LoadWatch.Notices;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage;

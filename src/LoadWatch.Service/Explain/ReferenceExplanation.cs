@@ -1,9 +1,12 @@
 using System.Globalization;
 using System.Text;
+using LoadWatch.Anchors;
 using LoadWatch.Days;
 using LoadWatch.Loads;
+using LoadWatch.Notices;
 using LoadWatch.People;
 using LoadWatch.Service.Export;
+using LoadWatch.Service.Pipeline;
 using NodaTime;
 
 namespace LoadWatch.Service.Explain;
@@ -12,9 +15,9 @@ namespace LoadWatch.Service.Explain;
 internal static class ReferenceExplanation
 {
     /// <summary>Nothing where the person's loads hang on none.</summary>
-    public static void Append(StringBuilder text, Person person, Group group, AnchorBook anchors, LocalDate date)
+    public static void Append(StringBuilder text, Person person, Group group, TableBasis basis, LocalDate date)
     {
-        var periods = ReferencePeriods.Of(person, group, anchors);
+        var periods = ReferencePeriods.Of(person, group, basis.AnchorsOf(person));
         var now = periods.On(date);
         foreach (var value in now.Values)
         {
@@ -26,6 +29,25 @@ internal static class ReferenceExplanation
         {
             var also = later.From > date.PlusDays(-ReferencePeriods.WindowDays) ? "; rules of load are read by the values before it, too" : "";
             text.AppendLine(CultureInfo.InvariantCulture, $"    changed on {Words.Date(later.From)}: {ReferenceWords.Of(later.ChangesSince(earlier))}{also}");
+        }
+    }
+
+    /// <summary>What the person's own sessions tell on a date: used where nothing was measured, shown where it contradicts what was.</summary>
+    public static void AppendObserved(StringBuilder text, Person person, TableBasis basis, LocalDate date)
+    {
+        var (observed, stated) = (basis.ObservedOf(person), basis.StatedOf(person));
+        foreach (var one in observed.Where(one => one.From <= date).GroupBy(one => one.Of).Select(same => same.MaxBy(one => one.From)!))
+        {
+            var of = string.Concat(new[] { one.Sport, one.Exercise, one.Machine }.OfType<string>().Select(word => $" {word}"));
+            var use = stated.MeasuredOn(date, one.ToAnchor()) is null ? "used" : "not used, one is measured";
+            text.AppendLine(
+                CultureInfo.InvariantCulture,
+                $"    from own sessions {AnchorKinds.Of(one.Kind).Name}{OneLine.Of(of)} = {one.Value:0.###} {AnchorKinds.Of(one.Kind).Unit} (within {one.Error:0.###}) from {Words.Date(one.From)} on, {use}: {OneLine.Of(one.Basis)}");
+        }
+
+        foreach (var contradiction in AnchorContradiction.On(date, observed, stated))
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {OneLine.Of(contradiction.Words)}");
         }
     }
 }

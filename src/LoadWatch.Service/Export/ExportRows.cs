@@ -58,22 +58,46 @@ public sealed record DayLine(
     string State,
     string? StateSource,
     double? Load,
+    double? LoadError,
     double? Acute,
     double? Chronic,
     double? RatioCoupled,
     double? RatioUncoupled,
     double? RatioEwma,
     double? WeeklyChange,
+    double? WeeklyChangeOrdinary,
+    double? UsualWeek,
+    [property: JsonPropertyName("largest_session_30")] double? LargestSession30,
+    [property: JsonPropertyName("longest_run_30_m")] double? LongestRun30M,
     double? Monotony,
     double? Strain,
     [property: JsonPropertyName("coverage_7")] double Coverage7,
     [property: JsonPropertyName("coverage_28")] double Coverage28,
     [property: JsonPropertyName("heavy_or_fast_7")] IReadOnlyDictionary<string, int?> HeavyOrFast7,
     [property: JsonPropertyName("heavy_or_fast_28")] IReadOnlyDictionary<string, int?> HeavyOrFast28,
+    [property: JsonPropertyName("heavy_or_fast_14")] IReadOnlyDictionary<string, int?> HeavyOrFast14,
+    [property: JsonPropertyName("heavy_or_fast_usual_14")] IReadOnlyDictionary<string, double?> HeavyOrFastUsual14,
+    [property: JsonPropertyName("heavy_or_fast_known_7")] IReadOnlyDictionary<string, int?> HeavyOrFastKnown7,
+    [property: JsonPropertyName("heavy_or_fast_known_14")] IReadOnlyDictionary<string, int?> HeavyOrFastKnown14,
+    [property: JsonPropertyName("heavy_or_fast_known_28")] IReadOnlyDictionary<string, int?> HeavyOrFastKnown28,
     IReadOnlyDictionary<string, int?> DaysSinceHeavyOrFast);
+
+public sealed record HeavyWeekLine(int? Days, int Known, double? Usual, bool? Reached);
+
+public sealed record RoomLine(
+    string Person,
+    string Date,
+    string LoadQuantity,
+    double? InsideLimits,
+    string? Reason,
+    string? HeldBy,
+    bool PassedAtRest,
+    [property: JsonPropertyName("largest_day_30")] double? LargestDay30,
+    [property: JsonPropertyName("largest_day_30_on")] string? LargestDay30On,
+    IReadOnlyDictionary<string, HeavyWeekLine> HeavyOrFastWeek);
 
 public sealed record FindingLine(
     string Person, string Rule, string? Region, string? Quantity, string Date, string Severity, double Value, double Limit, string Unit);
 
 public sealed record AlertLine(
-    string Id, string Person, string Rule, string? Region, string? Quantity, string Raised, string State, string Severity, string? ShelvedUntil, string Text);
+    string Id, string Person, string Rule, string? Region, string? Quantity, string Raised, string State, string Severity, string? ShelvedUntil, string Watch, string Text);

@@ -2,6 +2,7 @@ using LoadWatch.Activities;
 using LoadWatch.Alerts;
 using LoadWatch.Days;
 using LoadWatch.Findings;
+using LoadWatch.Limits;
 using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Quality;
@@ -24,7 +25,7 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
     private TableBasis? basis;
 
     /// <summary>What can be exported.</summary>
-    public static IReadOnlyList<string> Tables { get; } = ["arrivals", "activities", "days", "findings", "alerts"];
+    public static IReadOnlyList<string> Tables { get; } = ["arrivals", "activities", "days", "findings", "alerts", "today"];
 
     public void Write(string table, TextWriter output) => Write(Lines(table), output);
 
@@ -44,6 +45,7 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
             arrival.Sha, FileOf(arrival.Sha), arrival.Kind, Words.Of(arrival.State), arrival.Reason, arrival.Person)),
         "activities" => ByPerson(Activities),
         "days" => ByPerson(id => session.Days.OfPerson(id, from, to)).Select(OfDay),
+        "today" => ByPerson(id => session.Rooms.Of(id) is { } room && InRange(room.Date) ? [room] : Array.Empty<TodaysRoom>()).Select(OfRoom),
         "findings" => ByPerson(id => session.Findings.OfPerson(id, from, to)).Select(OfFinding),
         "alerts" => ByPerson(id => session.Alerts.All(id)).Where(alert => InRange(alert.Raised)).Select(OfAlert),
         _ => throw new ArgumentOutOfRangeException(nameof(table)),
@@ -149,23 +151,45 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
         Words.Of(day.State),
         day.StateSource,
         day.Load,
+        day.LoadError,
         day.Acute,
         day.Chronic,
         day.RatioCoupled,
         day.RatioUncoupled,
         day.RatioEwma,
         day.WeeklyChange,
+        day.WeeklyChangeOrdinary,
+        day.UsualWeek,
+        day.LargestSession30,
+        day.LongestRunMetres30,
         day.Monotony,
         day.Strain,
         day.Coverage7,
         day.Coverage28,
         ByRegion(day, region => region.Days7),
         ByRegion(day, region => region.Days28),
+        ByRegion(day, region => region.Days14),
+        ByRegion(day, region => region.Usual14),
+        ByRegion<int?>(day, region => region.Known7),
+        ByRegion<int?>(day, region => region.Known14),
+        ByRegion<int?>(day, region => region.Known28),
         ByRegion(day, region => region.DaysSince));
 
-    private static Dictionary<string, int?> ByRegion(Day day, Func<RegionDay, int?> value) =>
+    private static RoomLine OfRoom(TodaysRoom room) => new(
+        room.Person,
+        Words.Date(room.Date),
+        room.LoadQuantity,
+        room.Load,
+        room.Reason is { } reason ? Words.Of(reason) : null,
+        room.HeldBy,
+        room.IsPassedAtRest,
+        room.LargestDay,
+        room.LargestDayOn is { } on ? Words.Date(on) : null,
+        room.Regions.ToDictionary(week => BodyRegions.Word(week.Region), week => new HeavyWeekLine(week.Days, week.Known, week.UsualDays, week.IsReached), StringComparer.Ordinal));
+
+    private static Dictionary<string, T?> ByRegion<T>(Day day, Func<RegionDay, T?> value) =>
         BodyRegions.All.ToDictionary(
-            BodyRegions.Word, region => day.Regions.TryGetValue(region, out var known) ? value(known) : null, StringComparer.Ordinal);
+            BodyRegions.Word, region => day.Regions.TryGetValue(region, out var known) ? value(known) : default, StringComparer.Ordinal);
 
     private static FindingLine OfFinding(Finding finding) => new(
         finding.Person,
@@ -188,5 +212,6 @@ public sealed class Exporter(WorkingConfiguration configuration, StoreSession se
         Words.Of(alert.State),
         Words.Of(alert.Severity),
         alert.ShelvedUntil is { } until ? Words.Date(until) : null,
+        Words.Of(alert.Watch),
         alert.Text);
 }

@@ -1,10 +1,10 @@
+using LoadWatch.People;
 using LoadWatch.Recordings;
 using LoadWatch.Rows;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Configurations;
 using NodaTime;
-using NodaTime.Text;
 
 namespace LoadWatch.Service.Pipeline;
 
@@ -146,9 +146,11 @@ public sealed class Adoption
             renewed[person] = renewable;
         }
 
-        AskForRecordings(person, references.Append(FirstChangedHeartRate(person)).Min());
-        if (Changed(BasisParts.HeartRate, person))
+        AskForRecordings(person, references.Min());
+        if (ChangedHeartRate(person) is var (first, last))
         {
+            AskForRecordings(person, first, last);
+
             // From then on ratings are converted, by pairs of all the time before.
             session.People.MarkDirty(person, Beginning);
         }
@@ -161,21 +163,24 @@ public sealed class Adoption
         }
     }
 
-    private void AskForRecordings(string person, LocalDate? from)
+    /// <param name="to">Last date; null: all later ones.</param>
+    private void AskForRecordings(string person, LocalDate? from, LocalDate? to = null)
     {
         if (from is { } since)
         {
             // "Never" in the roster is the first date that there is.
             var date = LocalDate.Max(since, Beginning);
-            session.Outdated.AddRecordings(person, date.PlusDays(-NearDays).AtMidnight().InUtc().ToInstant(), End);
+            session.Outdated.AddRecordings(person, date.PlusDays(-NearDays).AtMidnight().InUtc().ToInstant(), to?.PlusDays(NearDays).AtMidnight().InUtc().ToInstant() ?? End);
             session.People.MarkDirty(person, date);
         }
     }
 
-    /// <summary>The earlier of the two dates, of which one may be missing.</summary>
-    private LocalDate? FirstChangedHeartRate(string person) => Changed(BasisParts.HeartRate, person)
-        ? before[(person, BasisParts.HeartRate)].Concat(after[(person, BasisParts.HeartRate)]).Where(text => text.Length > 0).Select(text => (LocalDate?)LocalDatePattern.Iso.Parse(text).Value).Min()
-        : null;
+    /// <summary>From when to when heart rate says something now and said nothing before, or the reverse.</summary>
+    private (LocalDate First, LocalDate? Last)? ChangedHeartRate(string person) =>
+        HeartRate(before, person).DifferenceTo(HeartRate(after, person));
+
+    private static DatePeriods HeartRate(ILookup<(string Scope, string Part), string> parts, string person) =>
+        DatePeriods.Parse(string.Join(' ', parts[(person, BasisParts.HeartRate)]));
 
     private LocalDate? FirstChangedAnchor(string person)
     {

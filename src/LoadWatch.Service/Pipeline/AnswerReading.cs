@@ -115,7 +115,7 @@ internal sealed class AnswerReading(WorkingConfiguration configuration, StoreSes
         var raised = session.Alerts.Changes.Of(alert.Id)
             .Where(change => change.Reason is AlertChangeReason.Raised or AlertChangeReason.RaisedAgain or AlertChangeReason.SeverityRose)
             .Max(change => change.Date);
-        return raised <= row.Date && raised < row.Since.InZone(person.Zone).Date;
+        return raised <= row.Date && raised < PersonDay.On(row.Since, person);
     }
 
     private static string? WrongUntil(StoredRow row, AnswerRow answer) => answer.Until switch

@@ -142,7 +142,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         : null;
 
     private string? Implausible(UsableRecording recording, Person person) =>
-        Plausibility.Of(recording, person, Basis.AnchorsOf(person), LocalStart.Of(recording.Recording, person).Date);
+        Plausibility.Of(recording, person, Basis.AnchorsOf(person), LocalStart.DateOf(recording.Recording, person));
 
     /// <summary>Folders only name people of the roster; one whom a decision names may have left it since.</summary>
     private ArrivalVerdict OfTheRoster(ArrivalVerdict verdict) =>
@@ -191,7 +191,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     private ActivityValues Values(UsableRecording usable, Person person)
     {
         var recording = usable.Recording;
-        var planned = Basis.Planned(person, LocalStart.Of(recording, person).Date);
+        var planned = Basis.Planned(person, LocalStart.DateOf(recording, person));
         var cut = SessionWindow.Of(recording, planned) is { } window ? RecordingCut.To(recording, window.Start, window.End) : CutRecording.Nothing(recording);
         var values = cut.LeftOut.Count == 0
             ? ActivityComputation.Compute(usable, person, Basis.AnchorsOf(person), configuration.Computation)

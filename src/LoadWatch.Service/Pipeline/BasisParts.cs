@@ -41,10 +41,10 @@ public static class BasisParts
     /// <summary>In which inboxes files that were cut off are used; there only where there is one.</summary>
     public const string Salvage = "salvage";
 
-    /// <summary>Of a person: birth year, sex and zone.</summary>
+    /// <summary>Of a person: birth year, sex, zone, and when their day begins.</summary>
     public const string Profile = "profile";
 
-    /// <summary>Of a person: from when on heart rate says nothing; the date, or empty.</summary>
+    /// <summary>Of a person: when heart rate says nothing; dates, or empty.</summary>
     public const string HeartRate = "heart_rate";
 
     /// <summary>Of a person: reference values, a line each that begins with its date.</summary>
@@ -79,23 +79,28 @@ public static class BasisParts
 
     private static IEnumerable<BasisPart> OfPerson(WorkingConfiguration configuration, Person person)
     {
-        var group = configuration.Groups[person.Group];
+        var group = configuration.GroupOf(person);
         return
         [
-            new(person.Id, Profile, JsonSerializer.Serialize(new { person.BirthYear, person.Sex, Zone = person.Zone.Id }, Json)),
-            new(person.Id, HeartRate, Date(person.HeartRateInvalidFrom)),
+            new(person.Id, Profile, ProfileOf(person)),
+            new(person.Id, HeartRate, person.HeartRateInvalid.ToString()),
             new(person.Id, Anchors, string.Join('\n', configuration.Anchors.Of(person.Id).Select(Line).Order(StringComparer.Ordinal))),
             new(person.Id, Group, Hash(new { person.Group, Names = GroupNames(configuration) })),
             new(person.Id, Rules, Hash(new { person.Name, group.LoadQuantity, group.LoadFallbacks, group.Limits, LoadCalendar.Version })),
         ];
     }
 
+    /// <summary>A day that begins at midnight is not named: nothing else was once.</summary>
+    private static string ProfileOf(Person person) => person.DayBeginsAt == LocalTime.Midnight
+        ? JsonSerializer.Serialize(new { person.BirthYear, person.Sex, Zone = person.Zone.Id }, Json)
+        : JsonSerializer.Serialize(new { person.BirthYear, person.Sex, Zone = person.Zone.Id, DayBeginsAt = LocalTimePattern.ExtendedIso.Format(person.DayBeginsAt) }, Json);
+
     /// <summary>The date of a line of <see cref="Anchors"/>, or null where the value holds from the beginning.</summary>
     public static LocalDate? DateOf(string line) => JsonSerializer.Deserialize<string?[]>(line)![0] is { Length: > 0 } date ? LocalDatePattern.Iso.Parse(date).Value : null;
 
     private static string Line(Anchor anchor) => JsonSerializer.Serialize(new[]
     {
-        Date(anchor.Date), anchor.Kind.ToString(), anchor.Value.ToString("R", System.Globalization.CultureInfo.InvariantCulture), anchor.Source.ToString(), anchor.Exercise, anchor.Note, anchor.Machine,
+        Date(anchor.Date), anchor.Kind.ToString(), anchor.Value.ToString("R", System.Globalization.CultureInfo.InvariantCulture), anchor.Source.ToString(), anchor.Exercise, anchor.Note, anchor.Machine, anchor.Sport,
     });
 
     private static IEnumerable<object> GroupNames(WorkingConfiguration configuration) =>

@@ -1,6 +1,8 @@
 using LoadWatch.Alerts;
 using LoadWatch.Days;
+using LoadWatch.Delivery.Mail;
 using LoadWatch.Delivery.Page;
+using LoadWatch.Delivery.Webhook;
 using LoadWatch.Findings;
 using LoadWatch.Notices;
 using LoadWatch.People;
@@ -18,20 +20,18 @@ namespace LoadWatch.Service.Pipeline;
 /// <param name="inboxesAway">Names of inboxes that the sweep could not look into.</param>
 public sealed class Briefs(WorkingConfiguration configuration, Instant now, IReadOnlyList<BriefLine> unreadable, IReadOnlyList<string> inboxesAway)
 {
-    private const int DaysBack = 400;
-    private const int RemarkDays = 14;
     private const int RefusedDays = 7;
-
-    /// <summary>A note is told for a week; it may stand for twelve.</summary>
-    private const int NoteDays = 7;
-
     private const string Mail = "mail";
 
     /// <summary>Freezes every brief that is due, and every update of a changed list, with its deliveries.</summary>
     /// <returns>How many were decided.</returns>
-    public int Decide(StoreSession session) => configuration.Contacts.Count(contact => DecideBrief(session, contact) || DecideUpdate(session, contact));
+    public int Decide(StoreSession session)
+    {
+        var people = People(session);
+        return configuration.Contacts.Count(contact => DecideBrief(session, people, contact) || DecideUpdate(session, people, contact));
+    }
 
-    private bool DecideBrief(StoreSession session, Contact contact)
+    private bool DecideBrief(StoreSession session, BriefPeople people, Contact contact)
     {
         var last = session.Notices.LastBrief(contact.Id, LocalDate.MaxIsoValue)?.Date;
         if (NoticePolicy.Decide(contact, now, last, session.Notices.Exists) is not { Reason: NoticeReason.BriefDue, Date: var date })
@@ -39,29 +39,29 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
             return false;
         }
 
-        var brief = Build(session, contact, date);
+        var brief = Build(session, people, contact, date);
         var notice = Write(contact, brief, NoticePolicy.BriefKey(contact, brief.Date), BriefText.Subject(brief), NoticeReason.BriefDue);
-        var flagged = brief.DataUpTo is null ? null : Flagged(session, contact);
+        var flagged = brief.DataUpTo is null ? null : Flagged(people, contact);
         return Freeze(session, notice with { Flagged = flagged }, Ways(contact));
     }
 
-    /// <summary>Only mail is told twice: the page is rewritten anyway.</summary>
-    private bool DecideUpdate(StoreSession session, Contact contact)
+    /// <summary>Only what leaves the machine is told twice, to whoever is told who is to be looked at: the page is rewritten anyway.</summary>
+    private bool DecideUpdate(StoreSession session, BriefPeople people, Contact contact)
     {
         var date = now.InZone(contact.Zone).Date;
-        var ways = Ways(contact).Where(way => way.Channel == Mail).ToList();
-        if (ways.Count == 0 || session.Notices.Get(NoticePolicy.BriefKey(contact, date))?.Flagged is not { } told)
+        var ways = Ways(contact).Where(way => way.Channel is Mail or WebhookChannel.ChannelName).ToList();
+        if (ways.Count == 0 || !contact.Forms.Contains(BriefForm.Daily) || session.Notices.Get(NoticePolicy.BriefKey(contact, date))?.Flagged is not { } told)
         {
             return false;
         }
 
-        var standing = Flagged(session, contact);
+        var standing = Flagged(people, contact);
         if (NoticePolicy.DecideUpdate(contact, date, told, standing, session.Notices.Exists) != NoticeReason.ListChanged)
         {
             return false;
         }
 
-        var built = Build(session, contact);
+        var built = Build(session, people, contact);
         var brief = built with { FirstLine = $"{FlaggedList.ChangeInWords(told, standing)} {built.FirstLine}" };
         var notice = Write(contact, brief, NoticePolicy.UpdateKey(contact, date), BriefText.UpdateSubject(brief), NoticeReason.ListChanged);
         return Freeze(session, notice with { Flagged = standing }, ways);
@@ -70,13 +70,12 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     private Notice Write(Contact contact, Brief brief, string key, string subject, NoticeReason reason)
     {
         var notice = new Notice(key, contact.Id, brief.Date, subject, BriefText.Write(brief), PageRenderer.Render(brief), reason);
-        if (contact.Names == NamesShown.Full)
-        {
-            return notice;
-        }
-
         var mailed = MailNames.Of(brief, contact.Names, configuration.People.Values);
-        return notice with { MailText = BriefText.Write(mailed), MailHtml = PageRenderer.Render(mailed) };
+        return notice with
+        {
+            MailText = contact.Names == NamesShown.Full ? null : BriefText.Write(mailed),
+            MailHtml = IsMailed(contact) ? MailRenderer.Render(mailed) : null,
+        };
     }
 
     private bool Freeze(StoreSession session, Notice notice, IReadOnlyList<Storage.Notices.Delivery> ways) =>
@@ -86,76 +85,46 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     private List<Storage.Notices.Delivery> Ways(Contact contact)
     {
         List<Storage.Notices.Delivery> ways = [new("page", contact.Id), new("log", contact.Id)];
-        if (configuration.Mail is not null && contact.Mail is { } address)
+        if (IsMailed(contact))
         {
-            ways.Add(new Storage.Notices.Delivery(Mail, address));
+            ways.Add(new Storage.Notices.Delivery(Mail, contact.Mail!));
+        }
+
+        if (configuration.Webhook?.Addresses.ContainsKey(contact.Id) == true)
+        {
+            ways.Add(new Storage.Notices.Delivery(WebhookChannel.ChannelName, contact.Id));
         }
 
         return ways;
     }
 
+    private bool IsMailed(Contact contact) => configuration.Mail is not null && contact.Mail is not null;
+
     /// <summary>Of what the contact may be told: an alert that is not for them changes no list of theirs.</summary>
-    private string Flagged(StoreSession session, Contact contact)
+    private string Flagged(BriefPeople people, Contact contact)
     {
-        var people = configuration.PeopleOf(contact).ToList();
-        var view = RoleView.Of(contact.Role, people.Count);
-        return FlaggedList.Of(people.SelectMany(person => session.Alerts.Open(person.Id)).Where(alert => view.ShowsRule(alert.Key.Rule)));
+        var told = configuration.PeopleOf(contact).ToList();
+        var view = RoleView.Of(contact.Role, told.Count);
+        return FlaggedList.Of(told.SelectMany(person => people.Open(person.Id)).Where(alert => view.ShowsRule(alert.Key.Rule)));
     }
+
+    /// <summary>What the briefs of one session are built from: the same for all contacts.</summary>
+    public BriefPeople People(StoreSession session) => new(configuration, now, session);
 
     /// <summary>The contact's brief as of now, due or not.</summary>
-    public Brief Build(StoreSession session, Contact contact) => Build(session, contact, now.InZone(contact.Zone).Date);
+    public Brief Build(StoreSession session, Contact contact) => Build(session, People(session), contact);
 
-    private Brief Build(StoreSession session, Contact contact, LocalDate date)
+    /// <param name="people">Of the same session.</param>
+    public Brief Build(StoreSession session, BriefPeople people, Contact contact) => Build(session, people, contact, now.InZone(contact.Zone).Date);
+
+    private Brief Build(StoreSession session, BriefPeople people, Contact contact, LocalDate date)
     {
         // New is what no brief of an earlier date told: the page of a morning stays the same after that morning's brief was decided.
-        var told = session.Notices.LastBrief(contact.Id, date)?.AlertPosition ?? 0;
-        var news = session.Alerts.Changes.Since(told).ToLookup(change => change.AlertId, StringComparer.Ordinal);
-        var subjects = configuration.PeopleOf(contact).Select(person => Subject(session, person, news)).ToList();
-        return BriefBuilder.Build(contact, date, subjects, Questions(session, contact), inboxesAway.Count > 0);
-    }
-
-    private BriefSubject Subject(StoreSession session, Person person, ILookup<string, AlertChange> news)
-    {
-        var through = DayUpdate.LastDateOver(person, now);
-        var days = session.Days.OfPerson(person.Id, through.PlusDays(-DaysBack), through);
-        var alerts = session.Alerts.All(person.Id)
-            .Select(alert => News(alert, news[alert.Id].ToList()))
-            .Where(item => item.Alert.State is AlertState.Unacknowledged or AlertState.Acknowledged || item.ReturnedSince)
-            .ToList();
-        return new BriefSubject(person, configuration.Groups[person.Group], days, alerts, Remarks(days)) { Notes = Notes(session, person, through) };
-    }
-
-    /// <summary>Told for a week from the day on which each came to be a note.</summary>
-    private static List<Finding> Notes(StoreSession session, Person person, LocalDate date)
-    {
-        var told = NotesOn(session, person, date.PlusDays(-NoteDays)).Select(note => note.Key).ToHashSet();
-        return [.. NotesOn(session, person, date).Where(note => !told.Contains(note.Key))];
-    }
-
-    private static IEnumerable<Finding> NotesOn(StoreSession session, Person person, LocalDate date) =>
-        session.Findings.OfPerson(person.Id, date, date).Where(finding => finding.Severity == Severity.Note);
-
-    private static AlertNews News(Alert alert, List<AlertChange> changes)
-    {
-        var isOver = alert.State is AlertState.Normal or AlertState.Returned;
-        return new AlertNews(
-            alert,
-            changes.Exists(change => change.Reason is AlertChangeReason.Raised or AlertChangeReason.RaisedAgain or AlertChangeReason.SeverityRose),
-            isOver && changes.Exists(change => change.Reason is AlertChangeReason.ReturnedToNormal or AlertChangeReason.Corrected),
-            isOver && changes.Exists(change => change.Reason == AlertChangeReason.Corrected));
-    }
-
-    private static List<string> Remarks(IReadOnlyList<Day> days)
-    {
-        var recorded = days.TakeLast(RemarkDays).Where(day => day.State == DayState.Recorded).ToList();
-        var without = recorded.Count(day => day.Load is null);
-        return without == 0
-            ? []
-            : [$"load unknown on {without} of {recorded.Count} recorded days of the last {RemarkDays}: no usable heart rate, or a reference value is missing"];
+        var told = session.Notices.LastBrief(contact.Id, date)?.AlertPosition;
+        return BriefBuilder.Build(contact, date, people.Of(contact, date, told, inboxesAway.Count > 0), Questions(session, contact), inboxesAway.Count > 0);
     }
 
     private List<BriefLine> Questions(StoreSession session, Contact contact) =>
-        
     [
         .. MissedNotices.Lines(session, contact, Ways(contact), now),
         .. inboxesAway.Select(inbox => new BriefLine(inbox, "this inbox cannot be looked into: nothing comes in from it until its folder is back")),

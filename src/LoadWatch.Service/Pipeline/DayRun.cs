@@ -1,6 +1,8 @@
 using LoadWatch.Activities;
+using LoadWatch.Anchors;
 using LoadWatch.Days;
 using LoadWatch.Findings;
+using LoadWatch.Limits;
 using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Plans;
@@ -29,7 +31,7 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
     private const int QuestionDays = 60;
 
     private readonly PersonPlans plans = new(configuration);
-    private readonly Lazy<ReferencePeriods> periods = new(() => ReferencePeriods.Of(person, configuration.Groups[person.Group], basis.AnchorsOf(person)));
+    private readonly Lazy<ReferencePeriods> periods = new(() => ReferencePeriods.Of(person, configuration.GroupOf(person), basis.AnchorsOf(person)));
     private LocalDate? replacedTo;
     private IReadOnlyList<Day>? before;
     private LocalDate? next;
@@ -46,7 +48,7 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
         var to = IsDone ? through : first!.Value.PlusDays(StretchDays - 1);
         var training = PersonTraining.Of(session, configuration, basis, person, first ?? replaced, IsDone ? null : to.PlusDays(LoadCalendar.SettledDaysBack));
         var series = first is { } start ? Series(session, training, start, to) : new PersonSeries([], []);
-        var stretch = new DayStretch(person.Id, replaced, IsDone ? null : to, series, [.. Questions(training).Where(question => IsDone || question.About <= to)])
+        var stretch = new DayStretch(person.Id, replaced, IsDone ? null : to, series, [.. Questions(training).Where(question => question.About >= replaced && (IsDone || question.About <= to))])
         {
             Through = through,
             Marks = marks,
@@ -55,18 +57,21 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
         (replacedTo, next) = (to, to.PlusDays(1));
         var wanted = Wanted(to.PlusDays(1));
         before = [.. before.Concat(series.Days).Where(day => day.Date >= wanted)];
-        return stretch;
+        return IsDone && series.Days.Count > 0 ? stretch with { Room = Room(session, to.PlusDays(1)) } : stretch;
     }
 
     private IReadOnlyList<Day> Begin(StoreSession session)
     {
         var days = session.Days.Before(person.Id, from, Wanted(from));
-        next = days.Count > 0 ? from : Earlier(session.Activities.FirstOfPerson(person.Id), session.TableRows.FirstOfPerson(person.Id));
+        next = days.Count > 0 ? from : Earlier(session.Activities.FirstOfPerson(person.Id), session.TableRows.FirstOfPerson(person.Id)?.PlusDays(person.DayBeginsAt == LocalTime.Midnight ? 0 : -1));
         return days;
     }
 
     /// <summary>The first of the days that are looked back at from a date.</summary>
-    private LocalDate Wanted(LocalDate date) => periods.Value.Reach(date) ?? date.PlusDays(-LoadCalendar.LookBackDays);
+    private LocalDate Wanted(LocalDate date) => TodaysLimits.First(periods.Value, date);
+
+    private TodaysRoom Room(StoreSession session, LocalDate date) =>
+        TodaysLimits.Behind(person, configuration.GroupOf(person), before!, plans.Of(session, person, date, date), Changes(session, date, date));
 
     private static LocalDate? Earlier(LocalDate? one, LocalDate? other) => one is { } a && other is { } b ? LocalDate.Min(a, b) : one ?? other;
 
@@ -75,7 +80,7 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
         var since = before!.Count == 0 ? LocalDate.MinIsoValue : first;
         var tests = session.TableRows.OfPerson(person.Id, RowKind.Tests, since, to).Select(row => new DatedTest(row.Date, (TestRow)row.Content)).ToList();
         var counted = training.Activities.Where(activity => activity.Date <= through);
-        return PersonSeries.Continue(person, configuration.Groups[person.Group], before, [.. counted], tests, plans.Of(session, person, since, to), to, Changes(session, first, to));
+        return PersonSeries.Continue(person, configuration.GroupOf(person), before, [.. counted], tests, plans.Of(session, person, since, to), to, Changes(session, first, to));
     }
 
     private ReferenceChanges Changes(StoreSession session, LocalDate first, LocalDate to) => new(periods.Value, () => new RestatedSessions(
@@ -88,7 +93,16 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
     private IEnumerable<Question> Questions(JoinResult training) => training.Questions
         .Select(question => new Question(person.Id, question.MayWait ? question.Date.PlusDays(WaitDays) : question.Date, question.Sentence, question.Date))
         .Concat(training.UnknownExercises.Select(exercise => new Question(
-            person.Id, exercise.Date, $"exercise \"{exercise.Word}\": which body regions? A line under computation, exercises tells", exercise.Date)));
+            person.Id, exercise.Date, $"exercise \"{exercise.Word}\": which body regions? A line under computation, exercises tells", exercise.Date)))
+        .Concat(Contradictions());
+
+    /// <summary>Asked when such a value is adopted, and not again each month.</summary>
+    private IEnumerable<Question> Contradictions()
+    {
+        var (observed, stated) = (basis.ObservedOf(person), basis.StatedOf(person));
+        return observed.Select(one => one.From).Distinct()
+            .SelectMany(month => AnchorContradiction.On(month, observed, stated).Where(one => one.Observed.From == month).Select(one => new Question(person.Id, month, one.Words, month)));
+    }
 }
 
 /// <summary>What was computed of one stretch of a person's dates.</summary>
@@ -101,6 +115,9 @@ public sealed record DayStretch(string Person, LocalDate From, LocalDate? To, Pe
 
     public required long Marks { get; init; }
 
+    /// <summary>What the limits leave open on the date behind the run; null where no day was computed.</summary>
+    public TodaysRoom? Room { get; init; }
+
     /// <summary>Questions to be asked before it are forgotten.</summary>
     public required LocalDate OldestQuestion { get; init; }
 
@@ -112,6 +129,16 @@ public sealed record DayStretch(string Person, LocalDate From, LocalDate? To, Pe
         if (To is null)
         {
             session.People.Computed(Person, Through, Marks);
+            WriteRoom(session);
+        }
+    }
+
+    /// <summary>What is dirty behind the last date alone leaves it.</summary>
+    private void WriteRoom(StoreSession session)
+    {
+        if (From <= Through)
+        {
+            session.Rooms.Replace(Person, Room);
         }
     }
 }

@@ -36,7 +36,7 @@ public sealed class DayUpdate(WorkingConfiguration configuration, Store store, I
     }
 
     /// <summary>The last date that is over for the person: the one that rules and alerts look at.</summary>
-    public static LocalDate LastDateOver(Person person, Instant now) => now.InZone(person.Zone).Date.PlusDays(-1);
+    public static LocalDate LastDateOver(Person person, Instant now) => PersonDay.LastOver(now, person);
 
     private void Compute(IReadOnlyList<DayRun> group, Action<StoreSession>? last, CancellationToken cancel)
     {

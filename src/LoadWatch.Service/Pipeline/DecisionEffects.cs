@@ -1,4 +1,5 @@
 using LoadWatch.Alerts;
+using LoadWatch.People;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
 using LoadWatch.Storage;
@@ -45,7 +46,7 @@ public sealed class DecisionEffects(WorkingConfiguration configuration, StoreSes
 
     /// <summary>The person's own date at a moment.</summary>
     public static LocalDate Today(WorkingConfiguration configuration, string person, Instant now) =>
-        now.InZone(configuration.People.GetValueOrDefault(person)?.Zone ?? DateTimeZone.Utc).Date;
+        configuration.People.TryGetValue(person, out var known) ? PersonDay.On(now, known) : now.InUtc().Date;
 
     private AlertReviewResult Review(Decision decision, Alert alert)
     {

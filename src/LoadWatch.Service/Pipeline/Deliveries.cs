@@ -2,6 +2,7 @@ using LoadWatch.Delivery;
 using LoadWatch.Delivery.Log;
 using LoadWatch.Delivery.Mail;
 using LoadWatch.Delivery.Page;
+using LoadWatch.Delivery.Webhook;
 using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
@@ -16,8 +17,18 @@ public sealed class Deliveries(Store store, IReadOnlyList<INoticeChannel> channe
     /// <summary>The channels of a configuration, those on disk first: they answer at once.</summary>
     public static IReadOnlyList<INoticeChannel> Channels(WorkingConfiguration configuration)
     {
-        INoticeChannel[] local = [new PageFile(configuration.PagesFolder), new NoticeFile(configuration.NoticesFolder)];
-        return configuration.Mail is { } mail ? [.. local, new MailChannel(mail)] : local;
+        List<INoticeChannel> channels = [new PageFile(configuration.PagesFolder), new NoticeFile(configuration.NoticesFolder)];
+        if (configuration.Mail is { } mail)
+        {
+            channels.Add(new MailChannel(mail));
+        }
+
+        if (configuration.Webhook is { } webhook)
+        {
+            channels.Add(new WebhookChannel(webhook, TimeProvider.System));
+        }
+
+        return channels;
     }
 
     public void Run(Instant now)

@@ -1,5 +1,6 @@
 using LoadWatch.Alerts;
 using LoadWatch.People;
+using LoadWatch.Plans;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using NodaTime;
@@ -30,7 +31,8 @@ public sealed class Evaluation(WorkingConfiguration configuration, Answers answe
             session.Alerts.Open(person.Id),
             id => session.Alerts.Changes.NextSequence(id) - 1,
             session.Findings.OfPerson(person.Id, date, date),
-            session.Findings.Held);
+            session.Findings.Held,
+            new Watching(configuration.GroupOf(person).Limits, session.Days.OfPerson(person.Id, date, date).Select(day => day.Plan).FirstOrDefault(DayPlan.None)));
         foreach (var alert in review.Alerts)
         {
             session.Alerts.Put(alert);

@@ -17,18 +17,25 @@ public sealed class Pages(WorkingConfiguration configuration, Store store, Brief
     public void Rewrite(Instant now, bool all)
     {
         var decided = store.Read(session => session.Decisions.All()) is [.., var last] ? last.Made + Committed : Instant.MinValue;
-        foreach (var contact in configuration.Contacts)
+        var stale = configuration.Contacts.Where(contact => all || !IsOfToday(PathOf(contact), contact, now) || WrittenAt(PathOf(contact)) < decided).ToList();
+        report.Pages.AddRange(configuration.Contacts.Except(stale).Select(PathOf));
+        if (stale.Count > 0)
         {
-            var path = Path.Combine(configuration.PagesFolder, $"{contact.Id}.html");
-            if (all || !IsOfToday(path, contact, now) || WrittenAt(path) < decided)
-            {
-                Rewrite(contact, path);
-            }
-            else
-            {
-                report.Pages.Add(path);
-            }
+            store.Read(session => Rewrite(session, stale));
         }
+    }
+
+    private string PathOf(Contact contact) => Path.Combine(configuration.PagesFolder, $"{contact.Id}.html");
+
+    private int Rewrite(StoreSession session, List<Contact> stale)
+    {
+        var people = briefs.People(session);
+        foreach (var contact in stale)
+        {
+            Rewrite(contact, PageRenderer.Render(briefs.Build(session, people, contact)));
+        }
+
+        return stale.Count;
     }
 
     private static bool IsOfToday(string path, Contact contact, Instant now) =>
@@ -37,12 +44,12 @@ public sealed class Pages(WorkingConfiguration configuration, Store store, Brief
 
     private static Instant WrittenAt(string path) => Instant.FromDateTimeUtc(File.GetLastWriteTimeUtc(path));
 
-    private void Rewrite(Contact contact, string path)
+    private void Rewrite(Contact contact, string html)
     {
-        var outcome = PageFile.Write(configuration.PagesFolder, contact.Id, PageRenderer.Render(store.Read(session => briefs.Build(session, contact))));
+        var outcome = PageFile.Write(configuration.PagesFolder, contact.Id, html);
         if (outcome.Result == ChannelResult.Delivered)
         {
-            report.Pages.Add(path);
+            report.Pages.Add(PathOf(contact));
         }
         else
         {

@@ -27,13 +27,13 @@ public sealed class PersonPlans(WorkingConfiguration configuration)
         var decisions = session.Decisions.InForce().ToLookup(decision => decision.Person, StringComparer.Ordinal);
         return configuration.People.Values.ToDictionary(
             person => person.Id,
-            person => Plan([.. entries[""], .. entries[person.Id]], [.. days[person.Id]], [.. decisions[person.Id]]),
+            person => Plan([.. entries[""].Concat(entries[person.Id]).Select(entry => OnDaysOf(person, entry))], [.. days[person.Id]], [.. decisions[person.Id]]),
             StringComparer.OrdinalIgnoreCase);
     }
 
     /// <summary>Of one person, what matters on dates of a range, both ends included.</summary>
     public PersonPlan Of(StoreSession session, Person person, LocalDate from, LocalDate to) => Plan(
-        [.. session.TableRows.Plan(person.Id, configuration.Subjects.Means(person), from, to).Select(Entry)],
+        [.. session.TableRows.Plan(person.Id, configuration.Subjects.Means(person), from, person.DayBeginsAt == LocalTime.Midnight ? to : to.PlusDays(1)).Select(Entry).Select(entry => OnDaysOf(person, entry))],
         session.TableRows.OfPerson(person.Id, RowKind.Days, Back(from, ReturnLookBackDays), to),
         session.Decisions.OfDates(person.Id, Back(from, PersonPlan.LongestDays), to));
 
@@ -54,6 +54,11 @@ public sealed class PersonPlans(WorkingConfiguration configuration)
         var plan = (PlanRow)row.Content;
         return new PlanEntry(plan.Word, row.Date, LastDate(row.Date, plan.Until), plan.Start, plan.End, plan.RecordingExpected, plan.Sport);
     }
+
+    /// <summary>What is planned before the person's day begins counts for the date before.</summary>
+    private static PlanEntry OnDaysOf(Person person, PlanEntry entry) => entry.Start < person.DayBeginsAt
+        ? entry with { From = entry.From.PlusDays(-1), Until = entry.Until.PlusDays(-1) }
+        : entry;
 
     /// <summary>One person's plan. Pure.</summary>
     /// <param name="entries">Lines about the person, the group or everybody.</param>

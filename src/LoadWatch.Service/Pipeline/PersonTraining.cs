@@ -19,12 +19,14 @@ public static class PersonTraining
         StoreSession session, WorkingConfiguration configuration, TableBasis basis, Person person, LocalDate? from = null, LocalDate? to = null)
     {
         var recorded = session.Activities.OfPerson(person.Id, from, to)
-            .Select(activity => new RecordedActivity(activity.Session, activity.Session.Start.WithOffset(activity.Session.LocalOffset).LocalDateTime, activity.Values) { Sources = [.. activity.Merge.Contributions.Select(one => one.Source)] })
+            .Select(activity => new RecordedActivity(activity.Session, activity.Session.Clock, activity.Values) { Sources = [.. activity.Merge.Contributions.Select(one => one.Source)] })
             .ToList();
-        var sets = session.TableRows.OfPerson(person.Id, RowKind.Sets, from, to);
-        var rows = session.TableRows.OfPerson(person.Id, RowKind.Sessions, from, to)
+        var last = person.DayBeginsAt == LocalTime.Midnight ? to : to?.PlusDays(1);
+        var sets = session.TableRows.OfPerson(person.Id, RowKind.Sets, from, last);
+        var rows = session.TableRows.OfPerson(person.Id, RowKind.Sessions, from, last)
             .Concat(sets)
-            .Select(row => new OwnedRow(row.Layout, row.Date, row.Key, row.Content))
+            .Select(row => new OwnedRow(row.Layout, row.Date, row.Key, row.Content).ByClockOf(person))
+            .Where(row => !(row.Date < from) && !(row.Date > to))
             .ToList();
         return ActivityJoin.Join(person, recorded, rows, sets.Count == 0 ? AnchorBook.Empty : basis.AnchorsOf(person), configuration.Computation);
     }

@@ -2,7 +2,6 @@ using LoadWatch.Activities;
 using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.Loads;
-using LoadWatch.Notices;
 using LoadWatch.People;
 using LoadWatch.Plans;
 using NodaTime;
@@ -95,10 +94,15 @@ internal sealed class SeriesStretch(Person person, Group group, PersonPlan plan,
     /// <summary>What a session of its sport cannot hold is none: a ride lifts no kilograms.</summary>
     private ActivityOnDay OnDay(JoinedActivity activity, LoadOrder order)
     {
-        var load = order.Choose(Loads(activity))?.Value ?? (QuantitySports.MayHold(group.LoadQuantity, activity.Sport) ? null : 0);
+        var chosen = order.Choose(Loads(activity));
+        var load = chosen?.Value ?? (QuantitySports.MayHold(group.LoadQuantity, activity.Sport) ? null : 0);
         return new ActivityOnDay(activity.Key, activity.Date, activity.Sources, load, activity.Stimulus, activity.AddsLoad)
         {
-            Session = DaySession.Of(activity, load, names),
+            Session = DaySession.Of(activity, load, names) with
+            {
+                ConvertedFrom = chosen is null || chosen.From == group.LoadQuantity ? null : chosen.From,
+                LoadError = chosen?.StandardError,
+            },
         };
     }
 
@@ -126,7 +130,7 @@ internal sealed class SeriesStretch(Person person, Group group, PersonPlan plan,
             .Where(one => one.Ago.HasValue)
             .OrderBy(one => one.Quantity, StringComparer.Ordinal)
             .ToDictionary(one => one.Quantity, one => day.Date.PlusDays(-one.Ago!.Value), StringComparer.Ordinal),
-        Loads = person.HeartRateInvalidFrom is null ? null : order.CarriedOn(day.Date),
+        Loads = person.HeartRateInvalid.IsEmpty ? null : order.CarriedOn(day.Date),
         Runs = memory.On(day.Date),
         FormerRuns = former?.On(day.Date),
     };

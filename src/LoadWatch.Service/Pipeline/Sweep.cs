@@ -76,9 +76,11 @@ public sealed class Sweep
         recovery.Run(cancel);
         intake.TakeIn(Inboxes.Changed(configuration, store, Looks, known, now, Report), cancel);
         moved.TakeUp();
-        Recompute(IsFromNothing ? Patience.Endless : new Patience(RecomputesFor), cancel);
+        var patience = IsFromNothing ? Patience.Endless : new Patience(RecomputesFor);
+        Recompute(patience, cancel);
         Report.Take(store.Write(answers.TakeUp));
         assigned.TakeUp(cancel);
+        Observe(new ObservedAnchorUpdate(configuration, store, now), patience, cancel);
         Evaluate(cancel);
         Report.InAll = store.Read(session => session.Arrivals.CountByState());
         return Report;
@@ -106,6 +108,7 @@ public sealed class Sweep
         var done = 0;
         recomputations.Progressed = () => progress?.Invoke(Math.Min(++done, all), all);
         Recompute(Patience.Endless, cancel);
+        Observe(new ObservedAnchorUpdate(configuration, store, now) { Through = through }, Patience.Endless, cancel);
         new DayUpdate(configuration, store, now, Report) { Through = through }.Run(cancel);
         return Report;
     }
@@ -144,6 +147,20 @@ public sealed class Sweep
 
             return session.Outdated.People();
         });
+    }
+
+    /// <summary>
+    /// A reference value from own sessions that changed bears on sessions, which are computed again. They show the same bests, so another turn finds a change only where
+    /// contents came through that were outdated for another reason; those that patience leaves come through in a later sweep.
+    /// </summary>
+    private void Observe(ObservedAnchorUpdate update, Patience patience, CancellationToken cancel)
+    {
+        while (update.Run(cancel) is { Count: > 0 } changed)
+        {
+            decoder.Basis = TableBasis.Of(configuration, store);
+            new Renewal(configuration, store, decoder.Basis).Run(changed);
+            Recompute(patience, cancel);
+        }
     }
 
     private void Evaluate(CancellationToken cancel)

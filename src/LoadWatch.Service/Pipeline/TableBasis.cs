@@ -1,4 +1,5 @@
 using System.Collections.Concurrent;
+using LoadWatch.Anchors;
 using LoadWatch.People;
 using LoadWatch.Plans;
 using LoadWatch.Rows;
@@ -10,37 +11,51 @@ using NodaTime;
 namespace LoadWatch.Service.Pipeline;
 
 /// <summary>
-/// What tables add to the configuration for the computation of recordings: reference values, and the planned sessions that have a time. Reads what is asked for,
+/// What tables and own sessions add to the configuration for the computation of recordings: reference values, and the planned sessions that have a time. Reads what is asked for,
 /// of the person and the dates, and keeps it; safe to use from several threads where its source is.
 /// </summary>
 public sealed class TableBasis
 {
     private readonly WorkingConfiguration configuration;
-    private readonly Func<Func<StoreSession, IReadOnlyList<StoredRow>>, IReadOnlyList<StoredRow>> read;
+    private readonly Action<Action<StoreSession>> read;
     private readonly ConcurrentDictionary<string, AnchorBook> anchors = new(StringComparer.Ordinal);
     private readonly ConcurrentDictionary<(string Person, LocalDate Month), IReadOnlyList<PlanEntry>> planned = new();
 
-    private TableBasis(WorkingConfiguration configuration, Func<Func<StoreSession, IReadOnlyList<StoredRow>>, IReadOnlyList<StoredRow>> read)
+    private TableBasis(WorkingConfiguration configuration, Action<Action<StoreSession>> read)
     {
         this.configuration = configuration;
         this.read = read;
     }
 
     /// <summary>The configuration alone.</summary>
-    public static TableBasis Of(WorkingConfiguration configuration) => new(configuration, _ => []);
+    public static TableBasis Of(WorkingConfiguration configuration) => new(configuration, _ => { });
 
     /// <summary>As the rows are when they are asked for first.</summary>
-    public static TableBasis Of(WorkingConfiguration configuration, Store store) => new(configuration, store.Read);
+    public static TableBasis Of(WorkingConfiguration configuration, Store store) => new(configuration, work => store.Read(session =>
+    {
+        work(session);
+        return true;
+    }));
 
     /// <summary>Within one transaction, and not beyond it.</summary>
     public static TableBasis Of(WorkingConfiguration configuration, StoreSession session) => new(configuration, work => work(session));
 
-    /// <summary>A person's reference values, of the configuration and of the tables.</summary>
-    public AnchorBook AnchorsOf(Person person) => anchors.GetOrAdd(person.Id, id =>
+    /// <summary>A person's reference values, of the configuration, of the tables and from own sessions.</summary>
+    public AnchorBook AnchorsOf(Person person) => anchors.GetOrAdd(person.Id, _ =>
     {
-        var measured = read(session => session.TableRows.StandingOf(id, RowKind.Tests)).Select(AnchorOf).OfType<Anchor>().ToList();
-        return measured.Count == 0 ? configuration.Anchors : configuration.Anchors.OfPerson(id).With(measured);
+        var (stated, observed) = (StatedOf(person), ObservedOf(person));
+        return observed.Count == 0 ? stated : stated.OfPerson(person.Id).With(observed.Select(one => one.ToAnchor()));
     });
+
+    /// <summary>Those of the configuration and of the tables alone.</summary>
+    public AnchorBook StatedOf(Person person)
+    {
+        var measured = Read(session => session.TableRows.StandingOf(person.Id, RowKind.Tests)).Select(AnchorOf).OfType<Anchor>().ToList();
+        return measured.Count == 0 ? configuration.Anchors : configuration.Anchors.OfPerson(person.Id).With(measured);
+    }
+
+    /// <summary>Those from own sessions alone, sorted by month.</summary>
+    public IReadOnlyList<ObservedAnchor> ObservedOf(Person person) => Read(session => session.ObservedAnchors.OfPerson(person.Id));
 
     /// <summary>Whether recordings are computed differently by such a row.</summary>
     public static bool Matters(StoredRow row) => IsTimed(row.Content) || AnchorOf(row) is not null;
@@ -63,10 +78,17 @@ public sealed class TableBasis
     /// <summary>Lines of the plan with start and end that speak for a date of a month or for one next to it.</summary>
     private IReadOnlyList<PlanEntry> TimedIn(Person person, LocalDate month) => planned.GetOrAdd((person.Id, month), _ =>
     [
-        .. read(session => session.TableRows.Plan(person.Id, configuration.Subjects.Means(person), month.PlusDays(-1), month.PlusMonths(1)))
+        .. Read(session => session.TableRows.Plan(person.Id, configuration.Subjects.Means(person), month.PlusDays(-1), month.PlusMonths(1)))
             .Where(row => IsTimed(row.Content))
             .Select(PersonPlans.Entry),
     ]);
+
+    private IReadOnlyList<T> Read<T>(Func<StoreSession, IReadOnlyList<T>> work)
+    {
+        IReadOnlyList<T> rows = [];
+        read(session => rows = work(session));
+        return rows;
+    }
 
     private static Interval IntervalOf(PlanEntry entry, LocalDate date, DateTimeZone zone)
     {

@@ -1,4 +1,3 @@
-using LoadWatch.Notices;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Health;
 using LoadWatch.Service.Pipeline;

@@ -1,4 +1,3 @@
-using LoadWatch.Notices;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Recordings;
 

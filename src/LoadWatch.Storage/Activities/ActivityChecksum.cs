@@ -8,7 +8,7 @@ using NodaTime;
 namespace LoadWatch.Storage.Activities;
 
 /// <summary>
-/// A checksum over everything that an activity's row and its histograms hold. The engine checks the structure of its file, not what stands in the cells: a
+/// A checksum over everything that an activity's row, its histograms and its best means hold. The engine checks the structure of its file, not what stands in the cells: a
 /// flipped bit of a value is found by nothing else.
 /// </summary>
 internal static class ActivityChecksum
@@ -23,7 +23,8 @@ internal static class ActivityChecksum
     ];
 
     /// <param name="histograms">In ordinal order of their channels.</param>
-    public static string Of(ActivityRow row, IEnumerable<HistogramRow> histograms)
+    /// <param name="means">Likewise.</param>
+    public static string Of(ActivityRow row, IEnumerable<ChannelRow> histograms, IEnumerable<ChannelRow> means)
     {
         using var hash = IncrementalHash.CreateHash(HashAlgorithmName.SHA256);
         Append(hash, row.Sha);
@@ -34,10 +35,15 @@ internal static class ActivityChecksum
             Append(hash, Text(column.GetValue(row)));
         }
 
-        foreach (var histogram in histograms)
+        foreach (var kind in new[] { histograms, means })
         {
-            Append(hash, histogram.Channel);
-            Append(hash, Convert.ToHexString(histogram.Bins));
+            foreach (var one in kind)
+            {
+                Append(hash, one.Channel);
+                Append(hash, Convert.ToHexString(one.Bytes));
+            }
+
+            Append(hash, null);
         }
 
         return Convert.ToHexStringLower(hash.GetHashAndReset())[..Digits];
@@ -60,12 +66,12 @@ internal static class ActivityChecksum
     };
 }
 
-/// <summary>A row of <c>histogram</c>.</summary>
-internal sealed class HistogramRow
+/// <summary>A row of <c>histogram</c> or of <c>best_mean</c>.</summary>
+internal sealed class ChannelRow
 {
     public string Activity { get; init; } = "";
 
     public string Channel { get; init; } = "";
 
-    public byte[] Bins { get; init; } = [];
+    public byte[] Bytes { get; init; } = [];
 }

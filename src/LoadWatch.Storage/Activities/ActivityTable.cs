@@ -1,4 +1,6 @@
 using LoadWatch.Activities;
+using LoadWatch.Capacity;
+using LoadWatch.Loads;
 using LoadWatch.Recordings;
 using LoadWatch.Storage.Dialects;
 using LoadWatch.Storage.Recordings;
@@ -6,7 +8,7 @@ using NodaTime;
 
 namespace LoadWatch.Storage.Activities;
 
-/// <summary>Tables <c>activity</c> and <c>histogram</c>: what counts, and what was computed of it. An activity is one row, so that a year is some hundred.</summary>
+/// <summary>Tables <c>activity</c>, <c>histogram</c> and <c>best_mean</c>: what counts, and what was computed of it. An activity is one row, so that a year is some hundred.</summary>
 public sealed class ActivityTable
 {
     private const string Insert = """
@@ -18,13 +20,15 @@ public sealed class ActivityTable
             @PowerMeanWatts, @PowerMaxWatts, @UsableShare, @TimesInZone, @Remarks, @Quantities, @Stimulus, @Cuts, @Checksum)
         """;
 
-    private const string InsertHistogram = "INSERT INTO histogram (activity, channel, bins) VALUES (@Activity, @Channel, @Bins)";
+    private const string InsertHistogram = "INSERT INTO histogram (activity, channel, bins) VALUES (@Activity, @Channel, @Bytes)";
+
+    private const string InsertBestMeans = "INSERT INTO best_mean (activity, channel, means) VALUES (@Activity, @Channel, @Bytes)";
 
     private const string UpdateRecordings = "UPDATE activity SET recordings = @Recordings, checksum = @Checksum WHERE key = @Key";
 
     private const string Update = "UPDATE activity SET times_in_zone = @TimesInZone, remarks = @Remarks, quantities = @Quantities, checksum = @Checksum WHERE key = @Key";
 
-    // Its histograms go with it.
+    // Its histograms and best means go with it.
     private const string Delete = "DELETE FROM activity WHERE key = @key";
 
     private const string SelectActivities = """
@@ -47,12 +51,28 @@ public sealed class ActivityTable
 
     private const string SelectPage = SelectActivities + " WHERE a.key > @after ORDER BY a.key LIMIT @most";
     private const string SelectOne = SelectActivities + " WHERE a.key = @key";
-    private const string SelectHistograms = "SELECT activity, channel, bins FROM histogram WHERE activity >= @first AND activity <= @last ORDER BY activity, channel";
+    private const string SelectHistograms = "SELECT activity, channel, bins AS bytes FROM histogram WHERE activity >= @first AND activity <= @last ORDER BY activity, channel";
 
     private const string SelectHistogramsOfPerson = """
-        SELECT h.activity, h.channel, h.bins FROM activity a JOIN histogram h ON h.activity = a.key
+        SELECT h.activity, h.channel, h.bins AS bytes FROM activity a JOIN histogram h ON h.activity = a.key
         WHERE a.person = @person AND a.date >= @from AND a.date <= @to AND h.channel IN ('heart_rate', 'speed')
         """;
+
+    private const string SelectBestMeans = "SELECT activity, channel, means AS bytes FROM best_mean WHERE activity >= @first AND activity <= @last ORDER BY activity, channel";
+
+    private const string SelectBestMeansOfPerson = """
+        SELECT b.activity, b.channel, b.means AS bytes FROM activity a JOIN best_mean b ON b.activity = a.key
+        WHERE a.person = @person AND a.date >= @from AND a.date <= @to
+        """;
+
+    private const string SelectMergesInDates = """
+        SELECT r.*, a.key, a.date, a.recordings, a.session
+        FROM activity a JOIN recording r ON r.sha = a.sha AND r.part = a.part
+        WHERE a.person = @person AND a.date >= @from AND a.date <= @to
+        ORDER BY a.date, r.start, a.key
+        """;
+
+    private const string SelectQuantities = "SELECT date, quantities FROM activity WHERE person = @person AND date >= @from AND date <= @to AND quantities LIKE @part ORDER BY date, key";
 
     private readonly StoreSession session;
 
@@ -63,10 +83,12 @@ public sealed class ActivityTable
     {
         Remove(activity.Key);
         var row = ActivityRow.From(activity);
-        var histograms = HistogramRows(activity);
-        row.Checksum = ActivityChecksum.Of(row, histograms);
+        var histograms = ChannelRows(activity.Key, activity.Values.Histograms, HistogramCodec.Write);
+        var means = ChannelRows(activity.Key, activity.Values.BestMeans, BestMeansCodec.Write);
+        row.Checksum = ActivityChecksum.Of(row, histograms, means);
         session.Execute(Insert, row);
         session.ExecuteEach(InsertHistogram, histograms);
+        session.ExecuteEach(InsertBestMeans, means);
     }
 
     /// <summary>Notes what became of the recordings of an activity whose values stay. Nothing when there is none.</summary>
@@ -75,7 +97,7 @@ public sealed class ActivityTable
         if (session.Row<ActivityRow>(SelectOne, new { key = merge.Winner.Key }) is { } row)
         {
             row.Recordings = ActivityRow.Text(merge.Contributions);
-            row.Checksum = ActivityChecksum.Of(row, session.Rows<HistogramRow>(SelectHistograms, new { first = row.Key, last = row.Key }));
+            row.Checksum = ChecksumOf(row);
             session.Execute(UpdateRecordings, row);
         }
     }
@@ -84,7 +106,7 @@ public sealed class ActivityTable
     public void Renew(StoredActivity activity)
     {
         var row = ActivityRow.From(activity);
-        row.Checksum = ActivityChecksum.Of(row, session.Rows<HistogramRow>(SelectHistograms, new { first = row.Key, last = row.Key }));
+        row.Checksum = ChecksumOf(row);
         session.Execute(Update, row);
     }
 
@@ -106,16 +128,16 @@ public sealed class ActivityTable
     public LocalDate? FirstOfPerson(string person) => session.Row<FirstRow>(SelectFirst, new { person })?.Date;
 
     /// <summary>Time by value of every channel that has one.</summary>
-    public IReadOnlyDictionary<Channel, Histogram> Histograms(string key) => session.Rows<HistogramRow>(SelectHistograms, new { first = key, last = key })
-        .ToDictionary(row => Words<Channel>.Parse(row.Channel), row => HistogramCodec.Read(row.Bins));
+    public IReadOnlyDictionary<Channel, Histogram> Histograms(string key) => session.Rows<ChannelRow>(SelectHistograms, new { first = key, last = key })
+        .ToDictionary(row => Words<Channel>.Parse(row.Channel), row => HistogramCodec.Read(row.Bytes));
 
     /// <summary>Time by heart rate and by speed of a person's activities of the dates, both ends included, by key of the activity.</summary>
     public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, Histogram>> Histograms(string person, LocalDate from, LocalDate to) =>
-        session.Rows<HistogramRow>(SelectHistogramsOfPerson, new { person, from, to })
+        session.Rows<ChannelRow>(SelectHistogramsOfPerson, new { person, from, to })
             .GroupBy(row => row.Activity, StringComparer.Ordinal)
             .ToDictionary(
                 rows => rows.Key,
-                IReadOnlyDictionary<Channel, Histogram> (rows) => rows.ToDictionary(row => Words<Channel>.Parse(row.Channel), row => HistogramCodec.Read(row.Bins)),
+                IReadOnlyDictionary<Channel, Histogram> (rows) => rows.ToDictionary(row => Words<Channel>.Parse(row.Channel), row => HistogramCodec.Read(row.Bytes)),
                 StringComparer.Ordinal);
 
     /// <summary>How a person's activities were made whose winning recordings start in the range, both ends included, sorted by that start and by key.</summary>
@@ -131,29 +153,58 @@ public sealed class ActivityTable
     public IReadOnlyList<CheckedActivity> Check(string after, int most)
     {
         var rows = session.Rows<ActivityRow>(SelectPage, new { after, most });
-        var histograms = rows.Count == 0
-            ? []
-            : session.Rows<HistogramRow>(SelectHistograms, new { first = rows[0].Key, last = rows[^1].Key });
-        var byActivity = histograms.ToLookup(row => row.Activity, StringComparer.Ordinal);
-        return rows.ConvertAll(row => Check(row, byActivity[row.Key]));
+        var (histograms, means) = (OfPage(SelectHistograms, rows), OfPage(SelectBestMeans, rows));
+        return rows.ConvertAll(row => Check(row, histograms[row.Key], means[row.Key]));
     }
+
+    /// <summary>What a person's activities of the dates, both ends included, showed at best, sorted by date, start and key.</summary>
+    public IReadOnlyList<SessionBests> Bests(string person, LocalDate from, LocalDate to)
+    {
+        var means = session.Rows<ChannelRow>(SelectBestMeansOfPerson, new { person, from, to }).ToLookup(row => row.Activity, StringComparer.Ordinal);
+        return
+        [
+            .. session.Rows<ActivityRow>(SelectMergesInDates, new { person, from, to })
+                .Where(row => means.Contains(row.Key))
+                .Select(row => new SessionBests(
+                    row.Key, row.Date, row.ToMerge().Session.Sport, means[row.Key].ToDictionary(one => Words<Channel>.Parse(one.Channel), one => BestMeansCodec.Read(one.Bytes)))),
+        ];
+    }
+
+    /// <summary>The quantities of a person's activities of the dates, both ends included, where one's name begins with a prefix; sorted by date.</summary>
+    public IReadOnlyList<(LocalDate Date, IReadOnlyList<Quantity> Quantities)> QuantitiesLike(string person, LocalDate from, LocalDate to, string prefix) =>
+        session.Rows<QuantitiesRow>(SelectQuantities, new { person, from, to, part = $"%\"{prefix}%" })
+            .ConvertAll(row => (row.Date, (IReadOnlyList<Quantity>)JsonText.Read<List<Quantity>>(row.Quantities).Where(one => one.Name.StartsWith(prefix, StringComparison.Ordinal)).ToList()));
 
     private sealed class FirstRow
     {
         public LocalDate? Date { get; init; }
     }
 
-    private static CheckedActivity Check(ActivityRow row, IEnumerable<HistogramRow> histograms)
+    private sealed class QuantitiesRow
     {
-        var now = ActivityChecksum.Of(row, histograms);
+        public LocalDate Date { get; init; }
+
+        public string Quantities { get; init; } = "";
+    }
+
+    private ILookup<string, ChannelRow> OfPage(string select, List<ActivityRow> rows) =>
+        (rows.Count == 0 ? [] : session.Rows<ChannelRow>(select, new { first = rows[0].Key, last = rows[^1].Key })).ToLookup(row => row.Activity, StringComparer.Ordinal);
+
+    private string ChecksumOf(ActivityRow row)
+    {
+        var only = new { first = row.Key, last = row.Key };
+        return ActivityChecksum.Of(row, session.Rows<ChannelRow>(SelectHistograms, only), session.Rows<ChannelRow>(SelectBestMeans, only));
+    }
+
+    private static CheckedActivity Check(ActivityRow row, IEnumerable<ChannelRow> histograms, IEnumerable<ChannelRow> means)
+    {
+        var now = ActivityChecksum.Of(row, histograms, means);
         return new CheckedActivity(row.Key, row.Person, row.Date, row.Sha, now, row.Checksum is { } written ? written == now : null);
     }
 
-    private static List<HistogramRow> HistogramRows(StoredActivity activity) =>
+    private static List<ChannelRow> ChannelRows<T>(string key, IReadOnlyDictionary<Channel, T> values, Func<T, byte[]> write) =>
     [
-        .. activity.Values.Histograms
-            .Select(pair => new HistogramRow { Activity = activity.Key, Channel = Words<Channel>.Of(pair.Key), Bins = HistogramCodec.Write(pair.Value) })
-            .OrderBy(row => row.Channel, StringComparer.Ordinal),
+        .. values.Select(pair => new ChannelRow { Activity = key, Channel = Words<Channel>.Of(pair.Key), Bytes = write(pair.Value) }).OrderBy(row => row.Channel, StringComparer.Ordinal),
     ];
 
     private IReadOnlyList<StoredActivity> Select(string where, object values) =>

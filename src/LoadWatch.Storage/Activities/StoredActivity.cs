@@ -4,7 +4,7 @@ using NodaTime;
 namespace LoadWatch.Storage.Activities;
 
 /// <summary>What counts: one or more recordings of the same session, merged.</summary>
-/// <param name="Values">As read by person or date they hold no histograms: <see cref="ActivityTable.Histogram"/> reads those.</param>
+/// <param name="Values">As read by person or date they hold no histograms and no best means: <see cref="ActivityTable.Histogram"/> and <see cref="ActivityTable.Bests"/> read those.</param>
 public sealed record StoredActivity(StoredMerge Merge, ActivityValues Values)
 {
     /// <summary>An activity of one recording alone.</summary>

@@ -21,6 +21,7 @@ public sealed class AlertChangeTable
 
     private const string SelectOf = $"SELECT {Columns} FROM alert_change WHERE alert = @alertId ORDER BY seq";
     private const string SelectSince = $"SELECT {Columns} FROM alert_change WHERE position > @position ORDER BY position";
+    private const string SelectReasonsSince = "SELECT alert, from_state, to_state, reason FROM alert_change WHERE position > @position ORDER BY position";
     private const string SelectNext = "SELECT COALESCE(MAX(seq), 0) + 1 FROM alert_change WHERE alert = @alertId";
     private const string SelectLastPosition = "SELECT COALESCE(MAX(position), 0) FROM alert_change";
 
@@ -39,6 +40,10 @@ public sealed class AlertChangeTable
 
     /// <summary>The changes of all alerts behind a position, in their order; from 0 on, all.</summary>
     public IReadOnlyList<AlertChange> Since(long position) => session.Rows<Row>(SelectSince, new { position }).ConvertAll(row => row.ToChange());
+
+    /// <summary>Which alerts changed behind a position, and how, in the order of the changes; without what each rests on.</summary>
+    public IReadOnlyList<(string AlertId, AlertState From, AlertState To, AlertChangeReason Reason)> ReasonsSince(long position) => session.Rows<Row>(SelectReasonsSince, new { position })
+        .ConvertAll(row => (row.Alert, Words<AlertState>.Parse(row.FromState), Words<AlertState>.Parse(row.ToState), Words<AlertChangeReason>.Parse(row.Reason)));
 
     /// <summary>The position of the last change, 0 before any. A notice keeps it to know what it has told.</summary>
     public long LastPosition() => session.Value<long>(SelectLastPosition);

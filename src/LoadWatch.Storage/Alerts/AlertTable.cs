@@ -9,16 +9,18 @@ namespace LoadWatch.Storage.Alerts;
 /// <summary>Tables <c>alert</c> and <c>alert_change</c>: where each alert stands, and every step of how it came there.</summary>
 public sealed class AlertTable
 {
-    private const string Columns = "id, person, rule, about, raised, judged, state, severity, text, shelved_until";
+    private const string Columns = "id, person, rule, about, raised, judged, state, severity, text, shelved_until, watch, limits_hash";
 
     private const string Upsert = $"""
         INSERT INTO alert ({Columns})
-        VALUES (@Id, @Person, @Rule, @About, @Raised, @Judged, @State, @Severity, @Text, @ShelvedUntil)
+        VALUES (@Id, @Person, @Rule, @About, @Raised, @Judged, @State, @Severity, @Text, @ShelvedUntil, @Watch, @LimitsHash)
         ON CONFLICT (id) DO UPDATE SET
-            judged = excluded.judged, state = excluded.state, severity = excluded.severity, text = excluded.text, shelved_until = excluded.shelved_until
+            judged = excluded.judged, state = excluded.state, severity = excluded.severity, text = excluded.text, shelved_until = excluded.shelved_until,
+            watch = excluded.watch, limits_hash = excluded.limits_hash
         """;
 
     private const string SelectOpen = $"SELECT {Columns} FROM alert WHERE person = @person AND state <> 'normal' ORDER BY id";
+    private const string SelectAllOpen = $"SELECT {Columns} FROM alert WHERE state <> 'normal' ORDER BY id";
     private const string SelectOfPerson = $"SELECT {Columns} FROM alert WHERE person = @person ORDER BY id";
     private const string SelectAll = $"SELECT {Columns} FROM alert ORDER BY id";
     private const string SelectOne = $"SELECT {Columns} FROM alert WHERE id = @id";
@@ -36,6 +38,9 @@ public sealed class AlertTable
 
     /// <summary>A person's alerts that are not normal, sorted by id.</summary>
     public IReadOnlyList<Alert> Open(string person) => Select(SelectOpen, new { person });
+
+    /// <summary>Everybody's alerts that are not normal, sorted by id.</summary>
+    public IReadOnlyList<Alert> Open() => Select(SelectAllOpen);
 
     /// <summary>Every alert, of one person or of all, sorted by id.</summary>
     public IReadOnlyList<Alert> All(string? person = null) => person is null ? Select(SelectAll) : Select(SelectOfPerson, new { person });
@@ -69,6 +74,10 @@ public sealed class AlertTable
 
         public LocalDate? ShelvedUntil { get; init; }
 
+        public string Watch { get; init; } = "";
+
+        public string? LimitsHash { get; init; }
+
         public static Row From(Alert alert) => new()
         {
             Id = alert.Id,
@@ -81,6 +90,8 @@ public sealed class AlertTable
             Severity = Words<Severity>.Of(alert.Severity),
             Text = alert.Text,
             ShelvedUntil = alert.ShelvedUntil,
+            Watch = Words<AlertWatch>.Of(alert.Watch),
+            LimitsHash = alert.LimitsHash,
         };
 
         public Alert ToAlert() => new(
@@ -92,6 +103,8 @@ public sealed class AlertTable
             Text)
         {
             ShelvedUntil = ShelvedUntil,
+            Watch = Words<AlertWatch>.Parse(Watch),
+            LimitsHash = LimitsHash,
         };
     }
 }

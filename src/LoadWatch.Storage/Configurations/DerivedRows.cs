@@ -17,15 +17,20 @@ public sealed class DerivedRows
         "DELETE FROM finding WHERE person = @person",
         "DELETE FROM day WHERE person = @person",
         "DELETE FROM question WHERE person = @person",
+        "DELETE FROM todays_room WHERE person = @person",
         "DELETE FROM person_state WHERE person = @person",
+        "DELETE FROM anchor_observed WHERE person = @person",
     ];
 
     private static readonly string[] Deletes =
     [
         "DELETE FROM finding",
         "DELETE FROM day",
+        "DELETE FROM todays_room",
         "DELETE FROM person_state",
+        "DELETE FROM anchor_observed",
         "DELETE FROM histogram",
+        "DELETE FROM best_mean",
         "DELETE FROM activity",
         "DELETE FROM recording",
         "DELETE FROM table_row",
@@ -79,7 +84,7 @@ public sealed class DerivedRows
         }
     }
 
-    /// <summary>Deletes the days, findings and questions of somebody who is watched no more; recordings go with their contents.</summary>
+    /// <summary>Deletes the days, findings, questions and observed reference values of somebody who is watched no more; recordings go with their contents.</summary>
     public void ForgetPerson(string person)
     {
         foreach (var delete in DeletesOfPerson)

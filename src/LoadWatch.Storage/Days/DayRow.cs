@@ -22,6 +22,8 @@ internal sealed class DayRow
 
     public double? Load { get; init; }
 
+    public double? LoadError { get; init; }
+
     public double? Acute { get; init; }
 
     public double? Chronic { get; init; }
@@ -39,6 +41,14 @@ internal sealed class DayRow
     public double? EwmaChronic { get; init; }
 
     public double? WeeklyChange { get; init; }
+
+    public double? WeeklyChangeOrdinary { get; init; }
+
+    public double? UsualWeek { get; init; }
+
+    public double? LargestSession30 { get; init; }
+
+    public double? LongestRunMetres30 { get; init; }
 
     public double? Monotony { get; init; }
 
@@ -71,6 +81,7 @@ internal sealed class DayRow
         State = Words<DayState>.Of(day.State),
         StateSource = day.StateSource,
         Load = day.Load,
+        LoadError = day.LoadError,
         Acute = day.Acute,
         Chronic = day.Chronic,
         ChronicBefore = day.ChronicBefore,
@@ -80,6 +91,10 @@ internal sealed class DayRow
         EwmaAcute = day.EwmaAcute,
         EwmaChronic = day.EwmaChronic,
         WeeklyChange = day.WeeklyChange,
+        WeeklyChangeOrdinary = day.WeeklyChangeOrdinary,
+        UsualWeek = day.UsualWeek,
+        LargestSession30 = day.LargestSession30,
+        LongestRunMetres30 = day.LongestRunMetres30,
         Monotony = day.Monotony,
         Strain = day.Strain,
         ChronicMedian = day.ChronicMedian,
@@ -100,6 +115,7 @@ internal sealed class DayRow
         State = Words<DayState>.Parse(State),
         StateSource = StateSource,
         Load = Load,
+        LoadError = LoadError,
         Acute = Acute,
         Chronic = Chronic,
         ChronicBefore = ChronicBefore,
@@ -109,6 +125,10 @@ internal sealed class DayRow
         EwmaAcute = EwmaAcute,
         EwmaChronic = EwmaChronic,
         WeeklyChange = WeeklyChange,
+        WeeklyChangeOrdinary = WeeklyChangeOrdinary,
+        UsualWeek = UsualWeek,
+        LargestSession30 = LargestSession30,
+        LongestRunMetres30 = LongestRunMetres30,
         Monotony = Monotony,
         Strain = Strain,
         ChronicMedian = ChronicMedian,

@@ -9,7 +9,8 @@ public sealed class DayTable
     private const string Columns = """
         person, date, state, state_source, load, acute, chronic, chronic_before, ratio_coupled, ratio_uncoupled, ratio_ewma,
         ewma_acute, ewma_chronic, weekly_change, monotony, strain, chronic_median, coverage7, coverage28,
-        days_since_first_covered, days_since_recorded, plan, regions
+        days_since_first_covered, days_since_recorded, plan, regions,
+        load_error, weekly_change_ordinary, usual_week, largest_session30, longest_run_metres30
         """;
 
     private const string Insert = $"""
@@ -17,7 +18,8 @@ public sealed class DayTable
         VALUES (
             @Person, @Date, @State, @StateSource, @Load, @Acute, @Chronic, @ChronicBefore, @RatioCoupled, @RatioUncoupled, @RatioEwma,
             @EwmaAcute, @EwmaChronic, @WeeklyChange, @Monotony, @Strain, @ChronicMedian, @Coverage7, @Coverage28,
-            @DaysSinceFirstCovered, @DaysSinceRecorded, @Plan, @Regions, @Sessions, @Carried)
+            @DaysSinceFirstCovered, @DaysSinceRecorded, @Plan, @Regions,
+            @LoadError, @WeeklyChangeOrdinary, @UsualWeek, @LargestSession30, @LongestRunMetres30, @Sessions, @Carried)
         """;
 
     private const string Delete = "DELETE FROM day WHERE person = @person AND date >= @from AND date <= @to";

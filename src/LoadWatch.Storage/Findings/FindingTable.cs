@@ -19,8 +19,11 @@ public sealed class FindingTable
     private const string SelectOfPerson =
         $"SELECT {Columns} FROM finding WHERE person = @person AND date >= @from AND date <= @to ORDER BY date, rule, about";
 
+    private const string SelectUnraised =
+        $"SELECT {Columns} FROM finding WHERE person = @person AND date = @date AND severity IN ('note', 'suppressed') ORDER BY rule, about";
+
     private const string CountHeld =
-        "SELECT COUNT(*) FROM finding WHERE person = @person AND date = @date AND rule = @rule AND about = @about AND severity <> 'note'";
+        "SELECT COUNT(*) FROM finding WHERE person = @person AND date = @date AND rule = @rule AND about = @about AND severity NOT IN ('note', 'suppressed')";
 
     private readonly StoreSession session;
 
@@ -44,7 +47,10 @@ public sealed class FindingTable
         session.Rows<Row>(SelectOfPerson, new { person, from = from ?? LocalDate.MinIsoValue, to = to ?? LocalDate.MaxIsoValue })
             .ConvertAll(row => row.ToFinding());
 
-    /// <summary>Whether the finding holds on a date; a note is none.</summary>
+    /// <summary>A person's notes of a date and what was suppressed on it, sorted by rule and what they are about.</summary>
+    public IReadOnlyList<Finding> Unraised(string person, LocalDate date) => session.Rows<Row>(SelectUnraised, new { person, date }).ConvertAll(row => row.ToFinding());
+
+    /// <summary>Whether the finding holds on a date; a note is none, nor what plan or answers suppress.</summary>
     public bool Held(FindingKey key, LocalDate date) =>
         session.Value<long>(CountHeld, new { person = key.Person, date, rule = key.Rule, about = AboutWord.Of(key.Region, key.Quantity) }) > 0;
 

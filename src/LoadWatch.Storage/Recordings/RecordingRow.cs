@@ -9,7 +9,7 @@ namespace LoadWatch.Storage.Recordings;
 internal class RecordingRow
 {
     public const string Columns =
-        "sha, part, person, start, local_offset_seconds, sport, elapsed_seconds, timer_seconds, source, channels, samples, sets, samples_digest, distance_metres";
+        "sha, part, person, start, local_offset_seconds, sport, elapsed_seconds, timer_seconds, source, channels, samples, sets, samples_digest, distance_metres, day_begins_seconds";
 
     public string Sha { get; init; } = "";
 
@@ -39,6 +39,8 @@ internal class RecordingRow
 
     public double? DistanceMetres { get; init; }
 
+    public long DayBeginsSeconds { get; init; }
+
     public static RecordingRow From(RecordingSummary recording) => new()
     {
         Sha = recording.Sha,
@@ -55,6 +57,7 @@ internal class RecordingRow
         Sets = recording.Sets,
         SamplesDigest = recording.SamplesDigest,
         DistanceMetres = recording.DistanceMetres,
+        DayBeginsSeconds = (long)recording.DayBegins.TotalSeconds,
     };
 
     public RecordingSummary ToRecording() => new(
@@ -73,5 +76,6 @@ internal class RecordingRow
         SamplesDigest)
     {
         DistanceMetres = DistanceMetres,
+        DayBegins = Duration.FromSeconds(DayBeginsSeconds),
     };
 }

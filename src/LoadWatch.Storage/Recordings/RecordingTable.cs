@@ -10,7 +10,7 @@ public sealed class RecordingTable
         INSERT INTO recording ({RecordingRow.Columns})
         VALUES (
             @Sha, @Part, @Person, @Start, @LocalOffsetSeconds, @Sport, @ElapsedSeconds, @TimerSeconds,
-            @Source, @Channels, @Samples, @Sets, @SamplesDigest, @DistanceMetres)
+            @Source, @Channels, @Samples, @Sets, @SamplesDigest, @DistanceMetres, @DayBeginsSeconds)
         """;
 
     private const string SelectOfPerson = $"SELECT {RecordingRow.Columns} FROM recording WHERE person = @person ORDER BY start, sha, part";

@@ -1,6 +1,7 @@
 using CsCheck;
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
+using LoadWatch.Plans;
 using LoadWatch.Stimulus;
 using NodaTime;
 using static LoadWatch.Tests.Days.Training;
@@ -198,6 +199,80 @@ public class AlertReviewTests
         Assert.Equal(AlertState.Returned, Assert.Single(Review(6, [Alert(AlertState.Unacknowledged)], Find(Legs, 6, severity: Severity.Note)).Alerts).State);
     }
 
+    [Theory]
+    [InlineData(AlertState.Unacknowledged)]
+    [InlineData(AlertState.Acknowledged)]
+    [InlineData(AlertState.Returned)]
+    public void ARuleThatIsSwitchedOffTakesItsAlertsOutOfServiceAndNothingElse(AlertState state)
+    {
+        var off = new Watching(new RuleLimits { StimulusGap = new StimulusGapLimits { Enabled = false } }, DayPlan.None);
+
+        var result = AlertReview.Review("anna", On(6), [Alert(state), Alert(state) with { Key = Load }], _ => 3, [], NeverHeld, off);
+
+        Assert.Equal(
+            [(Load, AlertWatch.Watched), (Legs, AlertWatch.OutOfService)],
+            result.Alerts.Select(alert => (alert.Key, alert.Watch)));
+        Assert.Equal(AlertState.Normal, result.Alerts[1].State);
+        Assert.Equal(AlertChangeReason.RuleSwitchedOff, result.Changes[^1].Reason);
+    }
+
+    /// <summary>The days were computed anew by the new limits, so the finding held on no date: no file was late.</summary>
+    [Fact]
+    public void WhatOnlyFormerLimitsRaisedIsOverByTheirChangeAndNotCorrected()
+    {
+        var limits = new RuleLimits();
+        var now = new Watching(limits with { StimulusGap = new StimulusGapLimits { NoticeDays = 12 } }, DayPlan.None);
+        var told = Alert(AlertState.Acknowledged) with { LimitsHash = RuleBook.LimitsHash(Legs.Rule, limits) };
+
+        AssertChange(AlertReview.Review("anna", On(6), [told], _ => 3, [], NeverHeld, now), 4, AlertState.Acknowledged, AlertState.Normal, AlertChangeReason.LimitsChanged);
+        AssertChange(
+            AlertReview.Review("anna", On(6), [told], _ => 3, [], (_, _) => true, now), 4, AlertState.Acknowledged, AlertState.Normal, AlertChangeReason.ReturnedToNormal);
+        AssertChange(
+            AlertReview.Review("anna", On(6), [told], _ => 3, [], NeverHeld, new Watching(limits, DayPlan.None)), 4, AlertState.Acknowledged, AlertState.Normal, AlertChangeReason.Corrected);
+    }
+
+    [Fact]
+    public void AFindingKeepsByWhichLimitsItHeld()
+    {
+        var limits = new RuleLimits();
+
+        var result = AlertReview.Review("anna", On(5), [], _ => 0, [Find(Legs, 5)], (_, _) => true, new Watching(limits, DayPlan.None));
+
+        Assert.Equal(RuleBook.LimitsHash(Legs.Rule, limits), Assert.Single(result.Alerts).LimitsHash);
+    }
+
+    /// <summary>Ill from the 6th to the 8th, and told only on the 7th: what held on the 5th was no error of data.</summary>
+    [Fact]
+    public void WhatPlanOrAnswersTurnOffIsSuppressedAndSaysSo()
+    {
+        var absent = new Watching(new RuleLimits(), DayPlan.None with { Absence = AbsenceWord.Ill });
+
+        var ended = AlertReview.Review("anna", On(6), [Alert(AlertState.Unacknowledged)], _ => 3, [], NeverHeld, absent);
+        AssertChange(ended, 4, AlertState.Unacknowledged, AlertState.Normal, AlertChangeReason.SuppressedByPlan);
+        Assert.Equal(AlertWatch.SuppressedByDesign, ended.Alerts[0].Watch);
+    }
+
+    [Fact]
+    public void WhatWouldHoldStandsUntoldUntilItIsWatchedAgain()
+    {
+        var absent = new Watching(new RuleLimits(), DayPlan.None with { Absence = AbsenceWord.Away });
+        var hidden = AlertReview.Review("anna", On(6), [Alert(AlertState.Unacknowledged)], _ => 3, [Find(Legs, 6, severity: Severity.Suppressed)], NeverHeld, absent);
+        AssertChange(hidden, 4, AlertState.Unacknowledged, AlertState.Unacknowledged, AlertChangeReason.SuppressedByPlan);
+        Assert.False(hidden.Alerts[0].IsTold);
+
+        var still = AlertReview.Review("anna", On(7), hidden.Alerts, _ => 4, [Find(Legs, 7, severity: Severity.Suppressed)], NeverHeld, absent);
+        Assert.Empty(still.Changes);
+
+        var again = AlertReview.Review("anna", On(8), still.Alerts, _ => 4, [Find(Legs, 8, severity: Severity.Warning)], (_, _) => true, new Watching(new RuleLimits(), DayPlan.None));
+        Assert.Equal([(5, AlertChangeReason.WatchedAgain), (6, AlertChangeReason.SeverityRose)], again.Changes.Select(change => (change.Sequence, change.Reason)));
+        Assert.True(again.Alerts[0].IsTold);
+        Assert.Equal(AlertState.Returned, AlertReview.Review("anna", On(8), still.Alerts, _ => 4, [], (_, _) => true, Watching.Everything).Alerts[0].State);
+    }
+
+    [Fact]
+    public void WhatIsSuppressedRaisesNothing() =>
+        Assert.Empty(AlertReview.Review("anna", On(6), [], _ => 0, [Find(Legs, 6, severity: Severity.Suppressed)], NeverHeld, Watching.Everything).Alerts);
+
     [Fact]
     public void AnAlertJudgedOnALaterDateIsLeftAlone()
     {
@@ -234,6 +309,8 @@ public class AlertReviewTests
         Assert.Empty(second.Changes);
         Assert.Equal(first.Alerts.Where(alert => alert.State != AlertState.Normal), second.Alerts);
     });
+
+    private static bool NeverHeld(FindingKey key, LocalDate date) => false;
 
     private static AlertReviewResult Review(int day, Alert[] current, params Finding[] findings) =>
         AlertReview.Review("anna", On(day), current, id => current.Any(alert => alert.Id == id) ? 3 : 0, findings, (_, _) => true);

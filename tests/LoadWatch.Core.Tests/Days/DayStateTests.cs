@@ -1,4 +1,6 @@
 using LoadWatch.Days;
+using LoadWatch.Plans;
+using NodaTime;
 using static LoadWatch.Tests.Days.Training;
 
 namespace LoadWatch.Tests.Days;
@@ -81,5 +83,22 @@ public class DayStateTests
 
         Assert.All(days.Skip(1).Take(5), day => Assert.Equal(DayState.Unknown, day.State));
         Assert.Equal("inferred from new watch", days[7].StateSource);
+    }
+
+    /// <summary>Sessions were planned on day 1 and 2, and day 2 was stated as rest later; the plan expects no recording on day 3.</summary>
+    [Fact]
+    public void APlannedSessionWithoutARecordingIsNoRest()
+    {
+        var plan = new PersonPlan
+        {
+            Entries = [new PlanEntry(PlanWord.TeamSession, On(1), On(2), null, null, true, null), new PlanEntry(PlanWord.TeamSession, On(3), On(3), null, null, false, null)],
+            Rests = new Dictionary<LocalDate, string> { [On(2)] = "answers" },
+        };
+
+        var days = LoadCalendar.Build("anna", [Activity(0), Activity(4)], On(4), plan);
+
+        Assert.Equal([DayState.Recorded, DayState.Unknown, DayState.Rest, DayState.Rest, DayState.Recorded], days.Select(day => day.State));
+        Assert.Null(days[1].Load);
+        Assert.Equal("inferred from watch", days[3].StateSource);
     }
 }

@@ -90,7 +90,7 @@ public class SetLogCoverageTests
     private static ActivityOnDay Session(int day, params StrengthSet[] sets) => Activity(
         day,
         source: "set log",
-        stimulus: [.. SessionOfSets.Of(sets, On(day), "anna", AnchorBook.Empty, DefaultRegions.Exercises).Regions]);
+        stimulus: [.. SessionOfSets.Of(sets, On(day), Given.Person() with { Id = "anna" }, AnchorBook.Empty, new()).Regions]);
 
     private static List<RegionDay> LegsOf(IReadOnlyList<Day> days) => days.Select(day => day.Regions[BodyRegion.Legs]).ToList();
 }

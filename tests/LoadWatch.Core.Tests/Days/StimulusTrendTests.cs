@@ -58,6 +58,26 @@ public class StimulusTrendTests
         Assert.Equal([0, 1, 2, 0], days.Select(day => day.Regions[BodyRegion.Arms].DaysSince));
     }
 
+    /// <summary>Every third day of 56, 19 of them, is heavy: 19 / 56 x 14 = 4.75 in 14 days. None in the 14 days that are held against it.</summary>
+    [Fact]
+    public void TheUsualNumberIsThatOfTheEightWeeksBefore()
+    {
+        var legs = Legs(Build(69, [.. Enumerable.Range(0, 70).Select(day => Activity(day, stimulus: Bouts(day < 56 && day % 3 == 0 ? 3 : 0)))]))[69];
+
+        Assert.Equal((0, 14, 4.75), (legs.Days14!.Value, legs.Known14, legs.Usual14!.Value));
+    }
+
+    [Fact]
+    public void TheUsualNumberIsUnknownWhereLittleIsKnown()
+    {
+        var legs = Legs(Build(83, [.. Enumerable.Range(0, 84).Select(day => Activity(day, stimulus: day is >= 10 and < 30 ? Unseen() : Bouts(3)))]));
+
+        Assert.Null(legs[69].Usual14);
+        Assert.NotNull(legs[83].Usual14);
+        Assert.Equal((7, 8, 8), (legs[37].Known7, legs[37].Known14, legs[37].Known28));
+        Assert.Equal((7, 8, 8), (legs[37].Days7!.Value, legs[37].Days14!.Value, legs[37].Days28!.Value));
+    }
+
     [Fact]
     public void ARegionIsCoveredFromItsFirstSeeingEntry()
     {
@@ -65,8 +85,8 @@ public class StimulusTrendTests
 
         Assert.Equal(RegionDay.NotCovered, legs[0]);
         Assert.Equal(RegionDay.NotCovered, legs[1]);
-        Assert.Equal(new RegionDay(false, 0, 0, 0, 0, null) { Never = true }, legs[2]);
-        Assert.Equal(new RegionDay(false, 0, 0, 2, 2, null) { Never = true }, legs[4]);
+        Assert.Equal(new RegionDay(false, 0, 0, 0, 0, null) { Never = true, Days14 = 0, Known7 = 1, Known14 = 1, Known28 = 1 }, legs[2]);
+        Assert.Equal(new RegionDay(false, 0, 0, 2, 2, null) { Never = true, Days14 = 0, Known7 = 3, Known14 = 3, Known28 = 3 }, legs[4]);
     }
 
     [Fact]

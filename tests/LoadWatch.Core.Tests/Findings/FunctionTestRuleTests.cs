@@ -56,7 +56,117 @@ public class FunctionTestRuleTests
     {
         var unable = new DatedTest(On(3), new TestRow("chair_stands_5", null, null, null, null, TestOutcome.Unable, null, null, 0.43));
 
-        Assert.Equal("Five chair stands on 8 January: could not be done.", Evaluate(Sex.Female, unable)[0].Text);
+        var finding = Evaluate(Sex.Female, unable)[0];
+        Assert.Equal("Five chair stands on 8 January: could not be done.", finding.Text);
+        Assert.Equal((1, 1, "tests not done"), (finding.Value, finding.Limit, finding.Unit));
+        Assert.Equal(("value", null, "on 2026-01-08, could not be done"), finding.Evidence.Inputs[0] is var item ? (item.Name, item.Value, item.Note) : default);
+    }
+
+    /// <summary>The limit is the one that was passed: nine seconds and the error of 2.5, not the cut-off of 15.</summary>
+    [Fact]
+    public void AFallIsToldWithItsOwnLimit()
+    {
+        var finding = Evaluate(Sex.Female, Test(3, "chair_stands_5", 9), Test(10, "chair_stands_5", 11.6))[0];
+
+        Assert.Equal((11.6, 11.5, "s"), (finding.Value, finding.Limit, finding.Unit));
+        Assert.Equal("Five chair stands 11.6 s on 15 January: 9 s on 8 January, a change beyond the error of the test: the limit is 11.5 s.", finding.Text);
+        Assert.Equal(27, Evaluate(Sex.Male, Test(3, "grip_strength", 30), Test(10, "grip_strength", 24))[^1].Limit); // Beyond the cut-off as well, which goes first.
+    }
+
+    [Theory]
+    [InlineData("left", null, null, "another hand (left, before right)")]
+    [InlineData("right", "stand 2", null, "another device (stand 2, before not stated)")]
+    [InlineData("right", null, 0.46, "another chair height (46 cm, before not stated)")]
+    public void AChangeOfConditionsIsToldAndNotCompared(string hand, string? device, double? chair, string difference)
+    {
+        var findings = Evaluate(Sex.Male, Test(3, "grip_strength", 40, "right"), Test(10, "grip_strength", 30, hand, device, chair));
+
+        Assert.All(findings, finding => Assert.Equal(Severity.Note, finding.Severity));
+        Assert.Equal($"Grip strength 30 kg on 15 January: 40 kg on 8 January, but with {difference}: not compared, so no alert.", findings[0].Text);
+        Assert.Empty(Evaluate(Sex.Male, Test(3, "grip_strength", 34, "right"), Test(10, "grip_strength", 30, hand, device, chair)));
+    }
+
+    [Fact]
+    public void TheSameHandIsComparedAcrossATestOfTheOther()
+    {
+        var findings = Evaluate(Sex.Male, Test(3, "grip_strength", 40, "right"), Test(6, "grip_strength", 39, "left"), Test(10, "grip_strength", 34, "Right "));
+
+        Assert.Equal((On(10), 34, 35), (findings[0].Date, findings[0].Value, findings[0].Limit));
+    }
+
+    [Fact]
+    public void TheHandThatFellIsToldThoughTheOtherIsBetter()
+    {
+        var findings = Evaluate(
+            Sex.Male,
+            Test(3, "grip_strength", 40, "left"),
+            Test(3, "grip_strength", 45, "right"),
+            Test(10, "grip_strength", 34, "left"),
+            Test(10, "grip_strength", 45, "right"));
+
+        Assert.Equal((34, 35), (findings[0].Value, findings[0].Limit));
+    }
+
+    [Theory]
+    [InlineData(27.9, true)]
+    [InlineData(28, false)]
+    public void WhatIsBeyondTheCutOffTakesAFifthOfTheErrorToEnd(double next, bool stands)
+    {
+        var findings = Evaluate(Sex.Male, Test(3, "grip_strength", 26), Test(10, "grip_strength", next));
+
+        Assert.Equal(stands, findings[^1].Date == On(19));
+        Assert.All(findings, finding => Assert.Equal(On(3), finding.Since));
+        Assert.Empty(Evaluate(Sex.Male, Test(10, "grip_strength", next)));
+    }
+
+    /// <summary>40, then 34: fallen by more than 5. It stands until a test is down by four fifths of 5 or less.</summary>
+    [Theory]
+    [InlineData(35.9, true)]
+    [InlineData(36, false)]
+    public void AFallThatTheNextTestConfirmsStands(double next, bool stands)
+    {
+        var findings = Evaluate(Sex.Male, Test(3, "grip_strength", 40), Test(10, "grip_strength", 34), Test(15, "grip_strength", next));
+
+        Assert.Equal(stands ? On(19) : On(14), findings[^1].Date);
+        Assert.Equal(On(10), findings[^1].Since);
+    }
+
+    [Fact]
+    public void CutOffsAreLimits()
+    {
+        var limits = new RuleLimits { FunctionTest = new() { GaitCutOffMetresPerSecond = 1.0 } };
+
+        Assert.Equal("Gait speed 0.9 m/s on 8 January: at or below the published cut-off of 1 m/s.", Evaluate(Sex.Female, limits, Test(3, "gait_speed", 0.9))[0].Text);
+    }
+
+    [Fact]
+    public void ATestTellsForAYear()
+    {
+        var days = Enumerable.Range(0, 400).Select(day => new Day { Person = "anna", Date = On(day), State = DayState.Unknown }).ToList();
+        var findings = new FunctionTestRule().Evaluate(new RuleSubject(Anna, days, new RuleLimits()) { Tests = [Test(3, "gait_speed", 0.5)] }).ToList();
+
+        Assert.Equal((On(3), On(367)), (findings[0].Date, findings[^1].Date));
+    }
+
+    /// <summary>What is kept is written with the day and read again (I-5).</summary>
+    [Fact]
+    public void TakenUpBehindAnyDateItTellsTheSame()
+    {
+        DatedTest[] tests = [Test(3, "grip_strength", 40, "right", "stand 2"), Test(10, "grip_strength", 34, "right", "stand 2"), Test(15, "grip_strength", 35, "left")];
+        var whole = Evaluate(Sex.Male, tests);
+        var days = Enumerable.Range(0, 20).Select(day => new Day { Person = "anna", Date = On(day), State = DayState.Unknown }).ToList();
+        for (var cut = 1; cut < 20; cut++)
+        {
+            var memory = new RuleMemory(Carried.Nothing);
+            var early = Taken(days.Take(cut), On(0), memory, tests);
+            var carried = Carried.Read(Carried.Write(Carried.Nothing with { Runs = memory.On(On(cut - 1)) }));
+            var late = Taken(days, On(cut), new RuleMemory(carried), [.. tests.Where(test => test.Date >= On(cut))]);
+
+            Assert.Equal(whole.Select(finding => (finding.Date, finding.Text)), early.Concat(late).Select(finding => (finding.Date, finding.Text)));
+        }
+
+        static List<Finding> Taken(IEnumerable<Day> days, NodaTime.LocalDate from, RuleMemory memory, IReadOnlyList<DatedTest> tests) =>
+            [.. new FunctionTestRule().Evaluate(new RuleSubject(Anna with { Sex = Sex.Male }, [.. days], new RuleLimits()) { From = from, Memory = memory, Tests = tests })];
     }
 
     [Theory]
@@ -68,12 +178,14 @@ public class FunctionTestRuleTests
         Evaluate(Sex.Male, Test(3, "grip_strength", 20), Test(3, "gait_speed", 0.5)),
         finding => Assert.DoesNotContain(word, finding.Text + finding.Evidence.Formula, StringComparison.OrdinalIgnoreCase));
 
-    private static DatedTest Test(int day, string test, double value, string? hand = null) =>
-        new(On(day), new TestRow(test, value, null, null, null, null, hand, null, null));
+    private static DatedTest Test(int day, string test, double value, string? hand = null, string? device = null, double? chair = null) =>
+        new(On(day), new TestRow(test, value, null, null, null, null, hand, device, chair));
 
-    private static List<Finding> Evaluate(Sex? sex, params DatedTest[] tests)
+    private static List<Finding> Evaluate(Sex? sex, params DatedTest[] tests) => Evaluate(sex, new RuleLimits(), tests);
+
+    private static List<Finding> Evaluate(Sex? sex, RuleLimits limits, params DatedTest[] tests)
     {
         var days = Enumerable.Range(0, 20).Select(day => new Day { Person = "anna", Date = On(day), State = DayState.Unknown }).ToList();
-        return new FunctionTestRule().Evaluate(new RuleSubject(Anna with { Sex = sex }, days, new RuleLimits()) { Tests = tests }).ToList();
+        return new FunctionTestRule().Evaluate(new RuleSubject(Anna with { Sex = sex }, days, limits) { Tests = tests }).ToList();
     }
 }

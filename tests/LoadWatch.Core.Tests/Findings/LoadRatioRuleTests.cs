@@ -69,7 +69,7 @@ public class LoadRatioRuleTests
             new QuantitySeries("unasked", "m", Ratios(1.9, 2)),
         }.ToDictionary(one => one.Quantity);
         Day[] days = [Ratio(0, 1), Ratio(1, 2) with { Plan = DayPlan.None with { ReturnDay = 1 } }];
-        var found = Rule.Evaluate(new RuleSubject(Anna, days, limits) { Series = series }).ToList();
+        var found = Rule.Evaluate(new RuleSubject(Anna, days, limits) { Series = series }).Told();
 
         var finding = Assert.Single(found);
         Assert.Equal((On(0), "distance_above_7_m_s"), (finding.Date, finding.Quantity));

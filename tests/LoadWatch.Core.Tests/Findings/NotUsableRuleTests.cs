@@ -9,12 +9,13 @@ namespace LoadWatch.Tests.Findings;
 public class NotUsableRuleTests
 {
     [Fact]
-    public void TwoSessionsInSevenDaysAreTold()
+    public void TwoSessionsInSevenDaysAreToldUntilAWeekIsWithout()
     {
         var findings = Evaluate((2, Channel.HeartRate, 0.3), (7, Channel.HeartRate, 0.49));
 
-        Assert.Equal([On(7), On(8)], findings.Select(finding => finding.Date));
+        Assert.Equal((On(7), On(13), 7), (findings[0].Date, findings[^1].Date, findings.Count));
         Assert.Equal("Too little usable heart rate in 2 sessions of the last 7 days, last on 12 January: nothing was read from it.", findings[0].Text);
+        Assert.Equal("Too little usable heart rate in 1 session of the last 7 days, last on 12 January: nothing was read from it; over with 0 or fewer.", findings[^1].Text);
     }
 
     [Fact]
@@ -58,7 +59,7 @@ public class NotUsableRuleTests
             UsableShare = new Dictionary<Channel, double> { [session.Channel] = session.Share },
         });
         var days = Enumerable.Range(0, 20).Select(day => new Day { Person = "anna", Date = On(day), State = DayState.Recorded }).ToList();
-        var person = from < 0 ? Anna : Anna with { HeartRateInvalidFrom = On(from) };
+        var person = from < 0 ? Anna : Anna with { HeartRateInvalid = LoadWatch.People.DatePeriods.Since(On(from)) };
         return new NotUsableRule().Evaluate(new RuleSubject(person, days, new RuleLimits()) { Activities = [.. activities, .. more] }).ToList();
     }
 }

@@ -13,7 +13,7 @@ public class RuleBookTests
     public void RulesAreNamedAndInOrder() => Assert.Equal(
         [
             "load_ratio", "weekly_jump", "session_spike", "monotony", "hard_days", "falling_load", "stimulus_gap", "stimulus_low", "falling_capacity", "silence",
-            "not_usable", "function_test",
+            "not_usable", "function_test", "test_overdue",
         ],
         RuleBook.All.Select(rule => rule.Name));
 
@@ -77,10 +77,35 @@ public class RuleBookTests
             new() { Silence = new() { Enabled = false } },
             new() { NotUsable = new() { Enabled = false } },
             new() { FunctionTest = new() { Enabled = false } },
+            new() { TestOverdue = new() { Enabled = false } },
         ];
 
-        Assert.All(RuleBook.All, rule => Assert.True(rule.IsEnabled(Watched.Defaults)));
-        Assert.Equal(RuleBook.All.Select(rule => rule.Name), off.Select(limits => Assert.Single(RuleBook.All, rule => !rule.IsEnabled(limits)).Name));
+        Assert.All(RuleBook.All, rule => Assert.True(rule.LimitsOf(Watched.Defaults).Enabled));
+        Assert.Equal(RuleBook.All.Select(rule => rule.Name), off.Select(limits => Assert.Single(RuleBook.All, rule => !rule.LimitsOf(limits).Enabled).Name));
+    }
+
+    [Fact]
+    public void TurningARuleOffOrChangingItsLimitsIsNeitherAReturnNorACorrection()
+    {
+        var (plan, hash) = (LoadWatch.Plans.DayPlan.None, RuleBook.LimitsHash("load_ratio", Watched.Defaults));
+        var other = Watched.Defaults with { LoadRatio = new() { Raise = 2 } };
+
+        Assert.Null(RuleBook.WhyQuiet("load_ratio", Watched.Defaults, plan, hash));
+        Assert.Null(RuleBook.WhyQuiet("load_ratio", other, plan, hashBefore: null));
+        Assert.Equal(QuietReason.LimitsChanged, RuleBook.WhyQuiet("load_ratio", other, plan, hash));
+        Assert.Equal(QuietReason.SuppressedByPlan, RuleBook.WhyQuiet("load_ratio", other, plan with { ReturnDay = 2 }, hash));
+        Assert.Equal(QuietReason.RuleOff, RuleBook.WhyQuiet("load_ratio", Watched.Defaults with { LoadRatio = new() { Enabled = false } }, plan, hash));
+        Assert.Equal(QuietReason.RuleOff, RuleBook.WhyQuiet("of_a_former_version", Watched.Defaults, plan, hash));
+    }
+
+    [Fact]
+    public void TheHashNamesTheLimitsOfOneRule()
+    {
+        var other = Watched.Defaults with { Silence = new() { ExtraDays = 3 } };
+
+        Assert.All(RuleBook.All, rule => Assert.Equal(rule.Name == "silence", RuleBook.LimitsHash(rule.Name, other) != RuleBook.LimitsHash(rule.Name, new RuleLimits())));
+        Assert.Matches("^[0-9a-f]{16}$", RuleBook.LimitsHash("silence", other));
+        Assert.Equal("", RuleBook.LimitsHash("of_a_former_version", other));
     }
 
     [Fact]
@@ -139,7 +164,7 @@ public class RuleBookTests
         object[] parts =
         [
             limits.LoadRatio, limits.WeeklyJump, limits.SessionSpike, limits.Monotony, limits.HardDays, limits.FallingLoad, limits.StimulusGap, limits.StimulusLow,
-            limits.FallingCapacity, limits.Silence, limits.NotUsable, limits.FunctionTest,
+            limits.FallingCapacity, limits.Silence, limits.NotUsable, limits.FunctionTest, limits.TestOverdue,
         ];
 
         Assert.All(parts, part => Validator.ValidateObject(part, new ValidationContext(part), validateAllProperties: true));

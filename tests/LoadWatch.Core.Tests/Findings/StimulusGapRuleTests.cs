@@ -124,4 +124,18 @@ public class StimulusGapRuleTests
         Assert.NotEmpty(Rule.Of(days));
         Assert.Empty(Rule.Of([.. days.Select(day => day with { Plan = plan })]));
     }
+
+    [Fact]
+    public void RegionsOfTheLimitsAreWatchedEachByItself()
+    {
+        var days = GapOf(12).Select(day => day with
+        {
+            Regions = new Dictionary<BodyRegion, RegionDay>(day.Regions) { [BodyRegion.Arms] = day.Regions[BodyRegion.Legs] },
+        }).ToList();
+        var limits = Defaults with { StimulusGap = new StimulusGapLimits { Regions = [BodyRegion.Arms, BodyRegion.Legs, BodyRegion.Trunk, BodyRegion.Arms] } };
+
+        Assert.All(Rule.Of(days), finding => Assert.Equal(BodyRegion.Legs, finding.Region));
+        Assert.Equal([BodyRegion.Legs, BodyRegion.Arms], Rule.Of(days, limits: limits).Where(finding => finding.Date == Training.On(12)).Select(finding => finding.Region!.Value).Order());
+        Assert.Empty(Rule.Of(days, limits: Defaults with { StimulusGap = new StimulusGapLimits { Regions = [] } }));
+    }
 }

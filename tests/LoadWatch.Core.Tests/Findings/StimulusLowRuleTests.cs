@@ -30,8 +30,8 @@ public class StimulusLowRuleTests
     }
 
     [Fact]
-    public void ItEndsWhenEnoughDaysLieInTheFourteenAgain() =>
-        Assert.Equal(On(86), Rule.Of(Visits(100, missed: [73, 78]), birthYear: 1950)[^1].Date);
+    public void ItEndsWhenOneDayMoreThanTheLimitLiesInTheFourteen() =>
+        Assert.Equal(On(91), Rule.Of(Visits(100, missed: [73, 78]), birthYear: 1950)[^1].Date);
 
     [Fact]
     public void UnderSixtyTheSameIsEnough() => Assert.Empty(Rule.Of(Visits(100, missed: [73, 78])));
@@ -50,6 +50,28 @@ public class StimulusLowRuleTests
     [Fact]
     public void WhileTheGapIsToldByItsOwnRuleItIsNotRaised() =>
         Assert.DoesNotContain(Rule.Of(Heavy(90, day => day <= 60 && day % 3 == 0), birthYear: 1990), finding => finding.Since >= On(70));
+
+    /// <summary>A gap that nobody watches tells nothing.</summary>
+    [Fact]
+    public void WhereTheGapIsNotWatchedItIsRaisedInItsPlace()
+    {
+        var days = Heavy(90, day => day <= 60 && day % 3 == 0);
+        var limits = Watched.Defaults with { StimulusGap = new() { Enabled = false } };
+
+        Assert.Contains(Rule.Of(days, limits: limits), finding => finding.Since >= On(70));
+    }
+
+    /// <summary>Low from the date 78 on, and enough again on 87.</summary>
+    [Fact]
+    public void TheDelaysAreLimits()
+    {
+        var days = Visits(100, missed: [73, 78]);
+        var slow = Watched.Defaults with { StimulusLow = new() { OnDays = 7 } };
+
+        Assert.Equal(On(84), Rule.Of(days, birthYear: 1950, limits: slow)[0].Date);
+        Assert.Equal(On(86), Rule.Of(days, birthYear: 1950, limits: Watched.Defaults with { StimulusLow = new() { ReturnExtraDays = 0 } })[^1].Date);
+        Assert.Equal(On(87), Rule.Of(days, birthYear: 1950, limits: Watched.Defaults with { StimulusLow = new() { ReturnExtraDays = 0, OffDays = 2 } })[^1].Date);
+    }
 
     [Theory]
     [InlineData(PlanWord.LightWeek)]

@@ -44,6 +44,13 @@ internal static class Watched
     /// <summary>A heavy day, then known days without heavy or fast work up to the gap.</summary>
     public static List<Day> GapOf(int days, double? usual = null) => Enumerable.Range(0, days + 1).Select(day => Gap(day, day, usual: usual)).ToList();
 
+    /// <summary>What holds where the rule is watched.</summary>
     public static List<Finding> Of(this IRule rule, IReadOnlyList<Day> days, int? birthYear = 1990, RuleLimits? limits = null) =>
-        rule.Evaluate(new RuleSubject(Training.Anna with { BirthYear = birthYear }, days, limits ?? Defaults)).ToList();
+        rule.Evaluate(new RuleSubject(Training.Anna with { BirthYear = birthYear }, days, limits ?? Defaults)).Told();
+
+    /// <summary>Without what plan or answers suppress.</summary>
+    public static List<Finding> Told(this IEnumerable<Finding> findings) => [.. findings.Where(finding => finding.Severity != Severity.Suppressed)];
+
+    public static List<Finding> Suppressed(this IRule rule, IReadOnlyList<Day> days) =>
+        [.. rule.Evaluate(new RuleSubject(Training.Anna, days, Defaults)).Where(finding => finding.Severity == Severity.Suppressed)];
 }

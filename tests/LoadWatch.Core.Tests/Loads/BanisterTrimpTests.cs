@@ -17,7 +17,7 @@ public class BanisterTrimpTests
     [InlineData(1, 200, 40, 200, Sex.Female, 4.5685)]
     public void MatchesTheEquationByHand(double minutes, int bpm, double rest, double max, Sex sex, double expected)
     {
-        var load = BanisterTrimp.Of(Given.Histogram((bpm, minutes)), new HeartRateReserve(rest, max, Estimated: false), sex);
+        var load = BanisterTrimp.Of(Given.Histogram((bpm, minutes)), new HeartRateReserve(rest, max, Estimated: false), sex, new());
 
         Assert.Equal(expected, load!.Value, 5e-5);
     }
@@ -26,7 +26,7 @@ public class BanisterTrimpTests
     [Fact]
     public void IntervalsCountSampleBySampleNotAtTheirMean()
     {
-        var load = BanisterTrimp.Of(Given.Histogram((120, 30), (180, 30)), new HeartRateReserve(50, 190, Estimated: false), Sex.Male);
+        var load = BanisterTrimp.Of(Given.Histogram((120, 30), (180, 30)), new HeartRateReserve(50, 190, Estimated: false), Sex.Male, new());
 
         Assert.Equal(131.0956, load!.Value, 1e-4);
     }
@@ -35,7 +35,7 @@ public class BanisterTrimpTests
     [Fact]
     public void AnUnstatedSexTakesTheMeanOfThePairs()
     {
-        var load = BanisterTrimp.Of(Given.Histogram((200, 1)), new HeartRateReserve(40, 200, Estimated: false), sex: null);
+        var load = BanisterTrimp.Of(Given.Histogram((200, 1)), new HeartRateReserve(40, 200, Estimated: false), sex: null, new());
 
         Assert.Equal(0.75 * Math.Exp(1.795), load!.Value, 1e-7);
     }
@@ -45,13 +45,13 @@ public class BanisterTrimpTests
     {
         var reserve = new HeartRateReserve(50, 150, Estimated: false);
 
-        Assert.Equal(BanisterTrimp.Of(Given.Histogram((150, 5)), reserve, Sex.Male), BanisterTrimp.Of(Given.Histogram((180, 5)), reserve, Sex.Male));
-        Assert.Equal(0, BanisterTrimp.Of(Given.Histogram((40, 5)), reserve, Sex.Male));
+        Assert.Equal(BanisterTrimp.Of(Given.Histogram((150, 5)), reserve, Sex.Male, new()), BanisterTrimp.Of(Given.Histogram((180, 5)), reserve, Sex.Male, new()));
+        Assert.Equal(0, BanisterTrimp.Of(Given.Histogram((40, 5)), reserve, Sex.Male, new()));
     }
 
     [Fact]
     public void NoTimeIsUnknownNotZero() =>
-        Assert.Null(BanisterTrimp.Of(Given.Histogram(), new HeartRateReserve(50, 150, Estimated: false), Sex.Male));
+        Assert.Null(BanisterTrimp.Of(Given.Histogram(), new HeartRateReserve(50, 150, Estimated: false), Sex.Male, new()));
 
     [Fact]
     public void MoreTimeNeverLowersItAndTwiceTheTimeIsTwiceTheLoad() =>
@@ -59,9 +59,9 @@ public class BanisterTrimpTests
             .Sample((bpm, minutes, otherBpm, otherMinutes, rest, max) =>
             {
                 var reserve = new HeartRateReserve(rest, max, Estimated: false);
-                var one = BanisterTrimp.Of(Given.Histogram((bpm, minutes)), reserve, Sex.Female)!.Value;
-                var both = BanisterTrimp.Of(Given.Histogram((bpm, minutes), (otherBpm, otherMinutes)), reserve, Sex.Female)!.Value;
-                var twice = BanisterTrimp.Of(Given.Histogram((bpm, 2 * minutes)), reserve, Sex.Female)!.Value;
+                var one = BanisterTrimp.Of(Given.Histogram((bpm, minutes)), reserve, Sex.Female, new())!.Value;
+                var both = BanisterTrimp.Of(Given.Histogram((bpm, minutes), (otherBpm, otherMinutes)), reserve, Sex.Female, new())!.Value;
+                var twice = BanisterTrimp.Of(Given.Histogram((bpm, 2 * minutes)), reserve, Sex.Female, new())!.Value;
                 return double.IsFinite(both) && both >= one && Math.Abs(twice - (2 * one)) <= 1e-7 * Math.Max(1, one);
             });
 }

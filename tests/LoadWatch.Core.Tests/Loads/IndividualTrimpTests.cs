@@ -20,7 +20,7 @@ public class IndividualTrimpTests
             {
                 var heartRate = Given.Histogram((bpm, minutes), (otherBpm, otherMinutes));
                 var reserve = new HeartRateReserve(rest, max, Estimated: false);
-                return IndividualTrimp.Of(heartRate, reserve, new TrimpPair(0.64, 1.92, Estimated: false)) == BanisterTrimp.Of(heartRate, reserve, Sex.Male);
+                return IndividualTrimp.Of(heartRate, reserve, new TrimpPair(0.64, 1.92, Estimated: false)) == BanisterTrimp.Of(heartRate, reserve, Sex.Male, new());
             });
 
     /// <summary>The widest anchors that <c>anchors.csv</c> takes.</summary>

@@ -1,4 +1,5 @@
 using CsCheck;
+using LoadWatch.People;
 using NodaTime;
 
 namespace LoadWatch.Loads;
@@ -33,6 +34,24 @@ public class LoadOrderTests
 
         Assert.Equal((85, true, "foster_load", 12), (ofRating.Value, ofRating.Estimated, ofRating.From, ofRating.Line!.Pairs));
         Assert.Equal((120, true, "minutes"), (ofMinutes.Value, ofMinutes.Estimated, ofMinutes.From));
+    }
+
+    /// <summary>The pairs lie on a line, so its error is 0; a load of its own method has none that is known.</summary>
+    [Fact]
+    public void AConvertedLoadCarriesTheErrorOfItsLine()
+    {
+        Assert.Equal(0, Choose(["foster_load"], ("foster_load", 300))!.StandardError!.Value, 6);
+        Assert.Null(Choose(["foster_load"], ("banister_trimp", 77))!.StandardError);
+    }
+
+    /// <summary>While it was not valid no pairs came; behind it the line is that of the 12 months before, as ever.</summary>
+    [Fact]
+    public void BehindTheTimeWithoutHeartRateItCountsAgain()
+    {
+        var order = Order([], date => !DatePeriods.Parse("2026-03-01/2026-03-31").Covers(date));
+
+        Assert.Equal(85, order.Choose(Session(new LocalDate(2026, 3, 10), ("foster_load", 300), ("banister_trimp", 99)))!.Value);
+        Assert.Equal(99, order.Choose(Session(new LocalDate(2026, 4, 1), ("foster_load", 300), ("banister_trimp", 99)))!.Value);
     }
 
     [Fact]

@@ -14,7 +14,8 @@ public class OneRepetitionMaxEstimateTests
             Given.Set("leg_press", 8, 60, 2),
             Given.Set("leg-press", 5, 174, 0) with { Machine = "Press 2" },
             Given.Set("leg press", 8, 75, null) with { Hardness = 8 },
-        ]);
+        ],
+        OneRepetitionMaxEquation.LoadChart);
 
         Assert.Equal(
             [("one_repetition_max_of_leg_press", 100.0), ("one_repetition_max_of_leg_press_on_press_2", 200.0)],
@@ -26,7 +27,7 @@ public class OneRepetitionMaxEstimateTests
     {
         var set = Given.Set("pull_up", 8, 75, 2);
 
-        Assert.NotNull(OneRepetitionMaxEstimate.KilogramsOf(set with { Load = SetLoad.Pin }));
+        Assert.NotNull(OneRepetitionMaxEstimate.KilogramsOf(set with { Load = SetLoad.Pin }, default));
         Assert.All(
             [
                 set with { Load = SetLoad.BodyWeight },
@@ -37,6 +38,6 @@ public class OneRepetitionMaxEstimateTests
                 set with { RepetitionsInReserve = null },
                 set with { Kilograms = 0 },
             ],
-            one => Assert.Null(OneRepetitionMaxEstimate.KilogramsOf(one)));
+            one => Assert.Null(OneRepetitionMaxEstimate.KilogramsOf(one, default)));
     }
 }

@@ -41,9 +41,19 @@ public class ReferencePeriodsTests
     [Fact]
     public void WhereHeartRateIsNotValidNothingChanges()
     {
-        Assert.Single(Of(Given.Person() with { HeartRateInvalidFrom = Change.PlusDays(-3) }, Max(190), Max(170, 0)).All);
-        Assert.Single(Of(Given.Person() with { HeartRateInvalidFrom = LocalDate.MinIsoValue }, Max(190), Max(170, 0)).All);
-        Assert.Equal(2, Of(Given.Person() with { HeartRateInvalidFrom = Change.PlusDays(1) }, Max(190), Max(170, 0)).All.Count);
+        Assert.Single(Of(Given.Person() with { HeartRateInvalid = DatePeriods.Since(Change.PlusDays(-3)) }, Max(190), Max(170, 0)).All);
+        Assert.Single(Of(Given.Person() with { HeartRateInvalid = DatePeriods.Always }, Max(190), Max(170, 0)).All);
+        Assert.Equal(2, Of(Given.Person() with { HeartRateInvalid = DatePeriods.Since(Change.PlusDays(1)) }, Max(190), Max(170, 0)).All.Count);
+    }
+
+    [Fact]
+    public void WhatChangedWhileHeartRateWasNotValidCountsOnceItIsAgain()
+    {
+        var until = Change.PlusDays(20);
+        var periods = Of(Given.Person() with { HeartRateInvalid = DatePeriods.Of([new DatePeriod(Change.PlusDays(-3), until)]) }, Max(190), Max(170, 0));
+
+        Assert.Equal(until.PlusDays(1), Assert.Single(periods.All.Skip(1)).From);
+        Assert.Equal([new ReferenceChange(AnchorKind.HeartRateMax, 190, 170)], periods.All[1].ChangesSince(periods.All[0]));
     }
 
     [Fact]

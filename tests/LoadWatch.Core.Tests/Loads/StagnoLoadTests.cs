@@ -8,7 +8,7 @@ public class StagnoLoadTests
     /// memory); percent of a maximum of 200.</summary>
     [Fact]
     public void WeighsTheFiveZonesByTheirPublishedWeights() =>
-        Assert.Equal(177.45, StagnoLoad.Of(Given.Histogram((136, 10), (150, 20), (164, 20), (178, 15), (194, 5)), 200));
+        Assert.Equal(177.45, StagnoLoad.Of(Given.Histogram((136, 10), (150, 20), (164, 20), (178, 15), (194, 5)), 200, new()));
 
     /// <summary>Percent of a maximum of 200: zones begin at 130, 144, 158, 172 and 186 bpm (from memory); the gaps between them are closed (a
     /// choice).</summary>
@@ -25,12 +25,12 @@ public class StagnoLoadTests
     [InlineData(186, 5.16)]
     [InlineData(200, 5.16)]
     [InlineData(230, 5.16)]
-    public void AZoneBeginsAtItsLowerBound(int bpm, double weight) => Assert.Equal(weight, StagnoLoad.Weight(bpm, 200));
+    public void AZoneBeginsAtItsLowerBound(int bpm, double weight) => Assert.Equal(weight, StagnoLoad.Weight(bpm, 200, new()));
 
     [Fact]
-    public void NoTimeIsUnknownNotZero() => Assert.Null(StagnoLoad.Of(Given.Histogram(), 200));
+    public void NoTimeIsUnknownNotZero() => Assert.Null(StagnoLoad.Of(Given.Histogram(), 200, new()));
 
     [Fact]
     public void AFasterHeartNeverWeighsLess() =>
-        Gen.Select(Gen.Int[25, 249], Gen.Double[80, 240]).Sample((bpm, max) => StagnoLoad.Weight(bpm + 1, max) >= StagnoLoad.Weight(bpm, max));
+        Gen.Select(Gen.Int[25, 249], Gen.Double[80, 240]).Sample((bpm, max) => StagnoLoad.Weight(bpm + 1, max, new()) >= StagnoLoad.Weight(bpm, max, new()));
 }

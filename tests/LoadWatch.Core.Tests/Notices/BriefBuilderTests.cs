@@ -57,8 +57,8 @@ public sealed class BriefBuilderTests
     }
 
     [Theory]
-    [InlineData(1, "All quiet: 1 person, nothing to act on. 1 question needs an answer.")]
-    [InlineData(2, "All quiet: 1 person, nothing to act on. 2 questions need an answer.")]
+    [InlineData(1, "Nothing to act on for 1 person, but 1 question needs an answer.")]
+    [InlineData(2, "Nothing to act on for 1 person, but 2 questions need an answer.")]
     public void FilesThatNeedAnAnswerAreMentioned(int files, string expected)
     {
         var questions = Enumerable.Range(1, files).Select(n => new BriefLine($"{n}.fit", "nobody is named as its owner")).ToList();
@@ -69,7 +69,7 @@ public sealed class BriefBuilderTests
     public void QuietWithoutDataIsNotCalledQuietAlone()
     {
         var unknown = Subject("b", "Ben") with { Days = Trends("b", 60, back => back < 7 ? null : 80, _ => null) };
-        Assert.Equal("All quiet: 2 people, nothing to act on. 1 person without a known day in the last week.", Build(Subject("a", "Ann"), unknown).FirstLine);
+        Assert.Equal("Nothing to act on for 2 people. 1 person without a known day in the last week.", Build(Subject("a", "Ann"), unknown).FirstLine);
     }
 
     [Fact]
@@ -181,7 +181,7 @@ public sealed class BriefBuilderTests
     public void SomebodyWhoWatchesThemselvesIsCalledYou()
     {
         var brief = BriefBuilder.Build(Oneself("a"), Today, [Subject("a", "Ann", LoadRatio("a"), StimulusGap("a"))], []);
-        Assert.Equal("To look at: load well above your usual; no heavy or fast leg work lately.", brief.FirstLine);
+        Assert.Equal("To look at: load well above your usual and no heavy or fast leg work lately.", brief.FirstLine);
         Assert.Equal("You", Assert.Single(brief.Flagged).Name);
         Assert.Equal("you, with your clinician where one looks after you", brief.Flagged[0].Reasons[0].Decides);
         Assert.Contains("what you had planned", brief.Flagged[0].Reasons[0].Consider, StringComparison.Ordinal);
@@ -241,14 +241,43 @@ public sealed class BriefBuilderTests
     }
 
     [Fact]
+    public void WhatThePlanHoldsBackIsSaidInTheRowAndFlagsNobody()
+    {
+        var held = new Finding("a", Today, "load_ratio", null, Severity.Suppressed, Today, 1.95, 1.8, "ratio", "Load is high.", new Evidence("a / b", "a choice", []));
+        var brief = Build(Subject("a", "Ann") with { Suppressed = [held] });
+        Assert.Equal("load well above the usual: not watched while away or returning", brief.Groups[0].Rows[0].Remark);
+        Assert.Empty(brief.Flagged);
+    }
+
+    [Fact]
     public void UnknownDaysStayUnknown()
     {
         var row = Build(Subject("a", "Ann") with { Days = Trends("a", 60, back => back < 3 ? null : 80, back => back < 3 ? null : false) }).Groups[0].Rows[0];
         Assert.Equal(4, row.KnownDays);
-        Assert.Null(row.WeekLoad);
+        Assert.Equal(320, row.WeekLoad);
         Assert.Null(row.Ratio);
         Assert.All(row.Recent.TakeLast(3), day => Assert.Equal((false, null, null), (day.Known, day.Load, day.HeavyLegs)));
         Assert.StartsWith("load known on 4 of the last 7 days, 5 wanted", row.Remark, StringComparison.Ordinal);
+    }
+
+    /// <summary>Two of the last 7 days are unknown: 80 x 5 = 400 so far, not the 560 that the week would be if scaled up.</summary>
+    [Fact]
+    public void AWeekThatIsNotKnownWholeStandsAsItIsSoFar()
+    {
+        var brief = Build(Subject("a", "Ann") with { Days = Trends("a", 60, back => back < 2 ? null : 80, _ => false) });
+        var row = brief.Groups[0].Rows[0];
+        Assert.Equal((400.0, 5, null), (row.WeekLoad, row.KnownDays, row.Ratio));
+        Assert.Contains("Ann                           400+     560", BriefText.Write(brief), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void WhereNothingIsKnownYetNothingIsCalledQuiet()
+    {
+        var nobody = new[] { Subject("a", "Ann") with { Days = [] }, Subject("b", "Ben") with { Days = Trends("b", 3, _ => null, _ => null) } };
+        var brief = Build(nobody);
+        Assert.Equal("Nothing is known yet: no recording of 2 people has come in.", brief.FirstLine);
+        Assert.Equal("Morning brief, Sunday 1 March 2026: nothing is known yet", BriefText.Subject(brief));
+        Assert.Equal("Nothing is known yet: no recording has come in.", BriefBuilder.Build(Oneself("a"), Today, nobody, []).FirstLine);
     }
 
     [Fact]

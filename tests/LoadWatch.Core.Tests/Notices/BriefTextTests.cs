@@ -15,12 +15,13 @@ public sealed class BriefTextTests
         the last week. 1 question needs an answer.
 
         TO LOOK AT
-        - Ann Tarrow (warning)
-          Load of the last 7 days is 1.94 times the usual week since 27 February.
-          (new)
-          Consider: comparing with what was planned: an easier day, or keeping the
-          plan if it was meant.
-          Decides: you and the person.
+        - Ann Tarrow (warning, new): Load of the last 7 days is 1.94 times the usual
+          week since 27 February; consider comparing with what was planned: an
+          easier day, or keeping the plan if it was meant; decides: you and the
+          person.
+          56 days to 28 Feb. The last 7 days: 480 AU; a usual week: 400 AU, the
+          middle half of 7 weeks. Load on 42 days, the highest 80 AU on 28 Feb; none
+          on 14. Heavy or fast leg work on 14 days, the last on 27 Feb.
 
         BACK TO USUAL
         - Ben Ollery: Heavy or fast leg work is back.
@@ -29,8 +30,8 @@ public sealed class BriefTextTests
         - 2026-02-28.fit: Nobody is named as its owner.
 
         EVERYBODY
-        * to look at. ? unknown. Known: days of the last 7. Legs: days since the
-        last heavy-or-fast leg day.
+        * to look at. ? unknown. + so far, of the known days. Known: days of the
+        last 7. Legs: days since the last heavy-or-fast leg day.
 
         Rowing squad, load in AU
           Name                          Week   Usual  Times  Known  Legs     Last
@@ -98,7 +99,7 @@ public sealed class BriefTextTests
     {
         const string Name = "Maximiliana Theodosia von Hohenkirchen-Altwasser";
         var text = BriefText.Write(BriefBuilder.Build(Contact(ContactRole.Coach), Today, [Subject("a", Name, Silence("a"))], []));
-        Assert.Contains($"- {Name} (notice)\n", text, StringComparison.Ordinal);
+        Assert.Contains($"- {Name} (notice, since 27 Feb):\n", text, StringComparison.Ordinal);
         Assert.Contains("* Maximiliana Theodosia von…  ", text, StringComparison.Ordinal);
     }
 

@@ -52,7 +52,7 @@ public sealed class NoticeUpdateTests
 
         var brief = BriefBuilder.Build(Ada, Today, [Subject("a", "Ann")], [missed, new BriefLine("1.fit", "held")]);
 
-        Assert.Equal("All quiet: 1 person, nothing to act on. 1 question needs an answer. Notices did not get through.", brief.FirstLine);
+        Assert.Equal("Nothing to act on for 1 person, but 1 question needs an answer. Notices did not get through.", brief.FirstLine);
         Assert.Contains("- Mail to Ada: Not delivered since Sunday 1 March 2026.", BriefText.Write(brief), StringComparison.Ordinal);
     }
 

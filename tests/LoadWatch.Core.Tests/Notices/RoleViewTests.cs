@@ -22,7 +22,8 @@ public sealed class RoleViewTests
         Assert.Equal(
             (health, ill, injured, "away", functionTest),
             (view.ShowsHealth, view.Word(AbsenceWord.Ill), view.Word(AbsenceWord.Injured), view.Word(AbsenceWord.Away), view.ShowsRule("function_test")));
-        Assert.All(RuleBook.All.Where(rule => rule.Name != FunctionTestRule.RuleName), rule => Assert.True(view.ShowsRule(rule.Name)));
+        Assert.Equal(functionTest, view.ShowsRule("test_overdue"));
+        Assert.All(RuleBook.All.Where(rule => !rule.Record.IsOfHealth), rule => Assert.True(view.ShowsRule(rule.Name)));
     }
 
     [Fact]

@@ -1,3 +1,4 @@
+using LoadWatch.Recordings;
 namespace LoadWatch.People;
 
 public class AnchorBookTests
@@ -63,4 +64,26 @@ public class AnchorBookTests
 
     private static double? Maximum(AnchorBook book, string? machine) =>
         book.On(Given.Date, "p1", AnchorKind.OneRepetitionMax, "Leg Press", machine)?.Value;
+
+    [Fact]
+    public void ASportsOwnCapacityGoesBeforeOneOfNoSport()
+    {
+        var book = Given.Anchors(
+            Given.Anchor(AnchorKind.CriticalPower, 250),
+            Given.Anchor(AnchorKind.CriticalPower, 210) with { Sport = "rowing" },
+            Given.Anchor(AnchorKind.CriticalPower, 260, source: AnchorSource.Observed) with { Sport = "cycling" });
+
+        Assert.Equal(210, book.On(Given.Date, "p1", AnchorKind.CriticalPower, new Sport("fitness_equipment", "indoor_rowing"))!.Value);
+        Assert.Equal(250, book.On(Given.Date, "p1", AnchorKind.CriticalPower, new Sport("cycling"))!.Value);
+        Assert.Equal(250, book.On(Given.Date, "p1", AnchorKind.CriticalPower, new Sport("kayaking"))!.Value);
+    }
+
+    [Fact]
+    public void WhatWasShownBeforeItHoldsIsAsOldAsThat()
+    {
+        var book = Given.Anchors(Given.Anchor(AnchorKind.PowerMax, 900, Given.Date.PlusDays(-9)) with { Sport = "cycling", ShownOn = Given.Date.PlusDays(-30) });
+
+        Assert.NotNull(book.Since(Given.Date.PlusDays(-30), Given.Date, "p1", AnchorKind.PowerMax, new Sport("cycling")));
+        Assert.Null(book.Since(Given.Date.PlusDays(-29), Given.Date, "p1", AnchorKind.PowerMax, new Sport("cycling")));
+    }
 }

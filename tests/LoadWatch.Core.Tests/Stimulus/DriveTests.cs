@@ -16,7 +16,7 @@ public class DriveTests
     [InlineData(174, 1)]
     public void HoldingAPowerAboveTheCriticalOneAsksForMoreAndMore(int second, double drive)
     {
-        var capacity = PowerCapacity.On(Given.Date, "p1", Given.Anchors(Given.Cyclist))!;
+        var capacity = PowerCapacity.On(Given.Date, "p1", Given.Anchors(Given.Cyclist), new Sport("cycling"))!;
 
         Assert.Equal(drive, Drives(new UsableChannel(Channel.Power, Given.Samples((350, 200)), 1), capacity)[second], 5e-5);
     }
@@ -42,12 +42,25 @@ public class DriveTests
     [Fact]
     public void WithoutAKnownMaximumEverythingAboveReadsAsCritical() => Assert.Equal(0.65, Drive.Of(900, 250, null, 1, 0.65));
 
+    /// <summary>By hand: at the available power the drive is 1, whatever is left.</summary>
+    [Theory]
+    [InlineData(1)]
+    [InlineData(0.5)]
+    [InlineData(0.05)]
+    public void TheAvailablePowerIsTheMaximumOfTheMoment(double balance)
+    {
+        var watts = AvailablePower.Watts(250, 1000, balance);
+
+        Assert.Equal(1, Drive.Of(watts, 250, 1000, balance, 0.65), 1e-12);
+        Assert.Equal(0.825, Drive.Of((watts + 250) / 2, 250, 1000, balance, 0.65), 1e-12);
+    }
+
     private static double DriveAfter(double watts, double seconds) =>
         Drive.Of(watts, 250, 1000, (20_000 - ((watts - 250) * seconds)) / 20_000, 0.65);
 
     private static List<double> Drives(UsableChannel power, PowerCapacity capacity)
     {
-        var drive = new PowerDrive(power, capacity, Variant.Mid);
+        var drive = new EnduranceDrive(capacity.Limits, Variant.Mid);
         var drives = new List<double>();
         foreach (var sample in power.Samples)
         {

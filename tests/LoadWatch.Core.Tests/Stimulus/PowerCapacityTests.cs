@@ -1,9 +1,12 @@
 using LoadWatch.People;
+using LoadWatch.Recordings;
 
 namespace LoadWatch.Stimulus;
 
 public class PowerCapacityTests
 {
+    private static readonly Sport Cycling = new("cycling");
+
     [Fact]
     public void EverythingMeasuredIsGradeA()
     {
@@ -41,16 +44,16 @@ public class PowerCapacityTests
         Assert.Equal(Grade.D, On([.. Given.Cyclist.Where(one => one.Kind != AnchorKind.WPrime)]).Grade);
 
     [Fact]
-    public void WithoutCriticalPowerThereIsNone() => Assert.Null(PowerCapacity.On(Given.Date, "p1", AnchorBook.Empty));
+    public void WithoutCriticalPowerThereIsNone() => Assert.Null(PowerCapacity.On(Given.Date, "p1", AnchorBook.Empty, Cycling));
 
     [Fact]
     public void ACapacityOfNothingIsNotKnown()
     {
         Assert.Null(On(With(AnchorKind.WPrime, one => one with { Value = 0 })).WPrime);
-        Assert.Null(PowerCapacity.On(Given.Date, "p1", Given.Anchors(With(AnchorKind.CriticalPower, one => one with { Value = 0 }))));
+        Assert.Null(PowerCapacity.On(Given.Date, "p1", Given.Anchors(With(AnchorKind.CriticalPower, one => one with { Value = 0 })), Cycling));
     }
 
-    private static PowerCapacity On(Anchor[] anchors) => PowerCapacity.On(Given.Date, "p1", Given.Anchors(anchors))!;
+    private static PowerCapacity On(Anchor[] anchors) => PowerCapacity.On(Given.Date, "p1", Given.Anchors(anchors), Cycling)!;
 
     private static Anchor[] With(AnchorKind kind, Func<Anchor, Anchor> change) =>
         [.. Given.Cyclist.Select(one => one.Kind == kind ? change(one) : one)];

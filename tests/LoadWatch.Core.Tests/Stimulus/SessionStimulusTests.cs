@@ -19,7 +19,7 @@ public class SessionStimulusTests
         Assert.Equal(12, legs.LargeSeconds!.Value.Mid, 0.1);
         Assert.Null(legs.HardRepetitions);
         Assert.Null(legs.HardSets);
-        Assert.Empty(legs.NotSeen);
+        Assert.Equal(["heavy pedalling at a low cadence: no usable cadence"], legs.NotSeen);
     }
 
     [Fact]
@@ -62,7 +62,7 @@ public class SessionStimulusTests
         Assert.Null(legs.HardBouts);
         Assert.Null(legs.LargeSeconds);
         Assert.Equal(60, legs.MediumSeconds!.Value.Mid);
-        Assert.Contains("power_max", Assert.Single(legs.NotSeen), StringComparison.Ordinal);
+        Assert.Contains("bouts and the largest class: no power_max dated within 183 days before", legs.NotSeen);
     }
 
     [Fact]
@@ -87,7 +87,7 @@ public class SessionStimulusTests
         Assert.Null(legs.HardBouts);
         Assert.Null(legs.LargeSeconds);
         Assert.Equal(600, legs.SlowSeconds!.Value.Mid, 1);
-        Assert.Contains(legs.NotSeen, reason => reason.StartsWith("speed is not read", StringComparison.Ordinal));
+        Assert.Contains(legs.NotSeen, reason => reason.StartsWith("speed: no critical_speed", StringComparison.Ordinal));
     }
 
     [Fact]
@@ -167,6 +167,15 @@ public class SessionStimulusTests
         Assert.Equal(["arm_bike", "turkish_walk"], stimulus.Questions);
         Assert.Contains("2 sets of turkish_walk: which body region?", stimulus.Remarks);
         Assert.Equal(3, stimulus.Remarks.Count);
+    }
+
+    [Fact]
+    public void ChairStandsThatNothingIsKnownOfMayHaveBeenHard()
+    {
+        var legs = Assert.Single(OfSets([], Given.Set("chair_stand", 10, 0)).Regions);
+
+        Assert.Null(legs.HardRepetitions);
+        Assert.Contains(legs.NotSeen, reason => reason.StartsWith("chair stands, steps and stairs may be near the maximum", StringComparison.Ordinal));
     }
 
     [Fact]

@@ -155,8 +155,8 @@ public class SetDemandTests
     {
         var hold = Demand(Hold(20, 9))!;
 
-        var two = SetStimulus.Of(BodyRegion.Legs, [hold, hold], unread: 1, []);
-        var three = SetStimulus.Of(BodyRegion.Legs, [hold, hold, hold], unread: 1, []);
+        var two = SetStimulus.Of(BodyRegion.Legs, [hold, hold], unread: 1, [], Variants.Usual);
+        var three = SetStimulus.Of(BodyRegion.Legs, [hold, hold, hold], unread: 1, [], Variants.Usual);
 
         Assert.True(two is { HardBouts: null, HardRepetitions: null, HardSets: null }, "unknown, not two");
         Assert.Equal((3, 3), (three.HardBouts!.Value.Mid, three.HardSets));
@@ -237,9 +237,9 @@ public class SetDemandTests
     private static StrengthSet Hold(double seconds, double hardness) =>
         Given.Set("wall_sit", null, null) with { IsHold = true, DurationSeconds = seconds, Hardness = hardness };
 
-    private static RegionStimulus Region(StrengthSet set) => SetStimulus.Of(BodyRegion.Legs, [Demand(set, Anchor("fresh"))!], unread: 0, []);
+    private static RegionStimulus Region(StrengthSet set) => SetStimulus.Of(BodyRegion.Legs, [Demand(set, Anchor("fresh"))!], unread: 0, [], Variants.Usual);
 
-    private static SetDemand? Demand(StrengthSet set, params Anchor[] anchors) => SetDemand.Of(set, Given.Date, "p1", Given.Anchors(anchors)).Demand;
+    private static SetDemand? Demand(StrengthSet set, params Anchor[] anchors) => SetDemand.Of(set, Given.Date, "p1", Given.Anchors(anchors), new()).Demand;
 
     private static string[] Cells(string pattern) => pattern.Split(' ', StringSplitOptions.RemoveEmptyEntries);
 
@@ -267,7 +267,7 @@ public class SetDemandTests
             Machine = maximum is "machine" or "borrowed" or "other" ? "Rack 2" : null,
         };
         Anchor[] anchors = maximum == "none" ? [] : [Anchor(maximum)];
-        var (demand, missing) = SetDemand.Of(set, Given.Date, "p1", Given.Anchors(anchors));
+        var (demand, missing) = SetDemand.Of(set, Given.Date, "p1", Given.Anchors(anchors), new());
         return demand is null ? $"unknown: {missing}" : Told(demand);
     }
 

@@ -54,7 +54,7 @@ public class SetStimulusTests
     [Fact]
     public void WithoutReserveTheLoadAloneIsALowerBound()
     {
-        var region = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", 12, 60), Maximum)!], unread: 0, []);
+        var region = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", 12, 60), Maximum)!], unread: 0, [], Variants.Usual);
 
         Assert.Equal(0, region.HardRepetitions!.Value.Mid);
         Assert.True(region.HardRepetitions.Value.High >= 7, "taken to failure 60 % reaches the line before the end");
@@ -65,12 +65,12 @@ public class SetStimulusTests
     [Fact]
     public void HardRepetitionsBesideAnUnreadSetAreUnknownUntilTheLineIsReached()
     {
-        var light = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", 5, 20), Maximum)!], unread: 5, []);
+        var light = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", 5, 20), Maximum)!], unread: 5, [], Variants.Usual);
         var hard = Enumerable.Repeat(Demand(Given.Set("squat", 5, 85, 1), Maximum)!, 2).ToList();
 
         Assert.Null(light.HardRepetitions);
         Assert.Null(light.HardSets);
-        Assert.Equal(10, SetStimulus.Of(BodyRegion.Legs, hard, unread: 5, []).HardRepetitions!.Value.Mid);
+        Assert.Equal(10, SetStimulus.Of(BodyRegion.Legs, hard, unread: 5, [], Variants.Usual).HardRepetitions!.Value.Mid);
     }
 
     /// <summary>Load chart: 8 done and 2 in reserve are 75 %.</summary>
@@ -92,7 +92,7 @@ public class SetStimulusTests
     [InlineData(8, double.NaN, double.NaN)]
     public void OtherwiseTheSetIsUnknownAndSaysWhatIsMissing(int? repetitions, double? kilograms, double? reserve)
     {
-        var (demand, missing) = SetDemand.Of(Given.Set("squat", repetitions, kilograms, reserve), Given.Date, "p1", AnchorBook.Empty);
+        var (demand, missing) = SetDemand.Of(Given.Set("squat", repetitions, kilograms, reserve), Given.Date, "p1", AnchorBook.Empty, new());
 
         Assert.Null(demand);
         Assert.NotNull(missing);
@@ -102,8 +102,8 @@ public class SetStimulusTests
     public void BandsAndClassesAreAlwaysOrderedAndMoreReserveNeverRaisesThem() =>
         Gen.Select(Gen.Int[1, 40], Gen.Double[1, 150], Gen.Double[0, 20]).Sample((repetitions, kilograms, reserve) =>
         {
-            var region = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", repetitions, kilograms, reserve), Maximum)!], unread: 0, []);
-            var further = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", repetitions, kilograms, reserve + 1), Maximum)!], unread: 0, []);
+            var region = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", repetitions, kilograms, reserve), Maximum)!], unread: 0, [], Variants.Usual);
+            var further = SetStimulus.Of(BodyRegion.Legs, [Demand(Given.Set("squat", repetitions, kilograms, reserve + 1), Maximum)!], unread: 0, [], Variants.Usual);
             Band[] bands = [region.HardRepetitions!.Value, region.SlowSeconds!.Value, region.MediumSeconds!.Value, region.LargeSeconds!.Value];
             return Array.TrueForAll(bands, band => band.Low >= 0 && band.Low <= band.Mid && band.Mid <= band.High && band.High <= repetitions)
                 && region.SlowSeconds.Value.Mid >= region.MediumSeconds.Value.Mid
@@ -113,5 +113,5 @@ public class SetStimulusTests
         });
 
     private static SetDemand? Demand(StrengthSet set, params Anchor[] anchors) =>
-        SetDemand.Of(set, Given.Date, "p1", Given.Anchors(anchors)).Demand;
+        SetDemand.Of(set, Given.Date, "p1", Given.Anchors(anchors), new()).Demand;
 }

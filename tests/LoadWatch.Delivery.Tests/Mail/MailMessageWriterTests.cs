@@ -78,6 +78,43 @@ public sealed class MailMessageWriterTests
     }
 
     [Fact]
+    public void APictureBecomesAPartThatTheHtmlNames()
+    {
+        byte[] first = [137, 80, 78, 71, 1], second = [137, 80, 78, 71, 2];
+        var html = $"<p><img src=\"data:image/png;base64,{Convert.ToBase64String(first)}\" alt=\"one\"><img src=\"data:image/png;base64,{Convert.ToBase64String(second)}\" alt=\"two\"></p>\n";
+
+        using var bytes = new MemoryStream(Bytes(Notice with { MailHtml = html }, "ada@example.org"));
+        var body = Assert.IsType<MultipartAlternative>(MimeMessage.Load(bytes, TestContext.Current.CancellationToken).Body);
+
+        var related = Assert.IsType<MultipartRelated>(body[1]);
+        Assert.Equal("text/html", related.ContentType.Parameters["type"]);
+        Assert.Equal(["text/html", "image/png", "image/png"], related.Select(part => part.ContentType.MimeType));
+        var pictures = related.Skip(1).Cast<MimePart>().ToList();
+        Assert.Equal([first, second], pictures.Select(Content));
+        Assert.All(pictures, picture => Assert.Equal((ContentDisposition.Inline, ContentEncoding.Base64), (picture.ContentDisposition!.Disposition, picture.ContentTransferEncoding)));
+        Assert.Equal(
+            $"<p><img src=\"cid:{pictures[0].ContentId}\" alt=\"one\"><img src=\"cid:{pictures[1].ContentId}\" alt=\"two\"></p>\n",
+            body.HtmlBody!.ReplaceLineEndings("\n"));
+        Assert.Equal(2, pictures.Select(picture => picture.ContentId).Distinct().Count());
+    }
+
+    [Fact]
+    public void AMailWithPicturesHasTheSameBytesAtEveryAttempt()
+    {
+        var notice = Notice with { MailHtml = "<img src=\"data:image/png;base64,iVBORw==\" alt=\"x\">" };
+
+        Assert.Equal(Bytes(notice, "ada@example.org"), Bytes(notice, "ada@example.org"));
+    }
+
+    [Fact]
+    public void WhatOnlyLooksLikeAPictureInATextStaysText()
+    {
+        const string Html = "<p>&lt;img src=&quot;data:image/png;base64,iVBORw==&quot;</p>\n";
+
+        Assert.Equal(Html, Message(Notice with { MailHtml = Html }, "ada@example.org").HtmlBody?.ReplaceLineEndings("\n"));
+    }
+
+    [Fact]
     public void TheBytesAreAsciiInShortLines()
     {
         var text = Encoding.Latin1.GetString(Bytes(Notice with { Html = new string('ä', 5000) }, "ada@example.org"));
@@ -122,6 +159,13 @@ public sealed class MailMessageWriterTests
     [InlineData("", false)]
     [InlineData("a@example.org, b@example.org", false)]
     public void ASenderMayHaveAName(string text, bool fine) => Assert.Equal(fine, MailAddresses.FaultOfMailbox(text) is null);
+
+    private static byte[] Content(MimePart part)
+    {
+        using var bytes = new MemoryStream();
+        part.Content!.DecodeTo(bytes, TestContext.Current.CancellationToken);
+        return bytes.ToArray();
+    }
 
     private static MimeMessage Message(Notice notice, string recipient) => MailMessageWriter.Write(notice, recipient, From);
 

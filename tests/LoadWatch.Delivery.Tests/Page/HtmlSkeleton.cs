@@ -31,7 +31,7 @@ internal static partial class HtmlSkeleton
             throw new FormatException($"no tag at {at}: {page.Substring(at, Math.Min(40, page.Length - at))}");
         }
 
-        tags.Add(Words().Replace(tag.Value, "aria-label"));
+        tags.Add(Words().Replace(tag.Value, "$1"));
 
         // The style is ours and holds no value; it is read as it stands.
         return tag.Value == "<style>" ? page.IndexOf("</style>", at, StringComparison.Ordinal) : at + tag.Length;
@@ -44,6 +44,6 @@ internal static partial class HtmlSkeleton
     private static partial Regex Reference();
 
     /// <summary>The words for who hears the page; they name the unit.</summary>
-    [GeneratedRegex("aria-label=\"[^\"]*\"")]
+    [GeneratedRegex("(aria-label|alt)=\"[^\"]*\"")]
     private static partial Regex Words();
 }

@@ -15,7 +15,7 @@ public sealed class PageFileTests : IDisposable
     {
         Assert.Equal(ChannelOutcome.Delivered, new PageFile(Folder).Deliver(Notice(1, "<p>one"), "ada"));
         Assert.Equal(ChannelOutcome.Delivered, new PageFile(Folder).Deliver(Notice(2, "<p>two"), "ada"));
-        Assert.Equal(["ada-2026-03-01.html", "ada-2026-03-02.html", "ada.html"], Names());
+        Assert.Equal(["ada-2026-03-01.html", "ada-2026-03-02.html", "ada.html", "ada~past.html"], Names());
         Assert.Equal("<p>two", Read("ada.html"));
         Assert.Equal("<p>one", Read("ada-2026-03-01.html"));
     }
@@ -40,6 +40,7 @@ public sealed class PageFileTests : IDisposable
 
         PageFile.Write(Folder, "ada", "<p>");
         Assert.Equal(UnixFileMode.UserRead | UnixFileMode.UserWrite, File.GetUnixFileMode(Path.Combine(Folder, "ada.html")));
+        Assert.Equal(UnixFileMode.UserRead | UnixFileMode.UserWrite, File.GetUnixFileMode(Path.Combine(Folder, "ada~past.html")));
         Assert.Equal(UnixFileMode.UserRead | UnixFileMode.UserWrite | UnixFileMode.UserExecute, File.GetUnixFileMode(Folder));
     }
 
@@ -60,7 +61,7 @@ public sealed class PageFileTests : IDisposable
         Directory.CreateDirectory(Folder);
         File.WriteAllText(Path.Combine(Folder, "ada.html.part"), "<p>ha");
         Assert.Equal(ChannelOutcome.Delivered, PageFile.Write(Folder, "ada", "<p>whole"));
-        Assert.Equal(["ada.html"], Names());
+        Assert.Equal(["ada.html", "ada~past.html"], Names());
         Assert.Equal("<p>whole", Read("ada.html"));
     }
 

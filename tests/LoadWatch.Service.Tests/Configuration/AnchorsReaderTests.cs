@@ -1,11 +1,12 @@
 using LoadWatch.People;
+using LoadWatch.Recordings;
 using NodaTime;
 
 namespace LoadWatch.Service.Tests.Configuration;
 
 public sealed class AnchorsReaderTests
 {
-    private const string Header = "person,date,anchor,value,unit,source,exercise,machine\n";
+    private const string Header = "person,date,anchor,value,unit,source,exercise,machine,sport\n";
 
     [Theory]
     [InlineData("anne,,body_mass,70,kg,,", """person: "anne" is not in the roster; did you mean "anna"?""")]
@@ -24,6 +25,9 @@ public sealed class AnchorsReaderTests
     [InlineData("anna,,one_repetition_max,90,kg,,leg_pres", """exercise: "leg_pres" is not an exercise with a known body region; did you mean "leg_press"?""")]
     [InlineData("anna,,body_mass,70,kg,,squat", "exercise: only one_repetition_max has an exercise, not body_mass")]
     [InlineData("anna,,body_mass,70,kg,,,scale 2", "machine: only one_repetition_max has a machine, not body_mass")]
+    [InlineData("anna,,critical_speed,4,m/s,,,,running", "sport: only critical_power, w_prime and power_max are of a sport, not critical_speed")]
+    [InlineData("anna,,critical_power,250,W,,,,rowin", """sport: "rowin" is not a sport in which power is read, such as cycling or rowing; did you mean "rowing"?""")]
+    [InlineData("anna,,critical_power,250,W,,,,running", """sport: "running" is not a sport in which power is read, such as cycling or rowing""")]
     public void AMistakeInARowIsToldWithItsLine(string row, string fault) =>
         Assert.Equal([$"anchors.csv:3: {fault}"], ConfigurationFolder.FaultsWith("anchors.csv", $"{Header}ben,,body_mass,70,kg,,\n{row}\n"));
 
@@ -99,4 +103,13 @@ public sealed class AnchorsReaderTests
         90,
         ConfigurationFolder.With("anchors.csv", "person,anchor,value,unit,exercise\nanna,one_repetition_max,90,kg,squat\n").Anchors
             .On(new LocalDate(2026, 1, 1), "anna", AnchorKind.OneRepetitionMax, "squat")!.Value);
+
+    [Fact]
+    public void ACapacityMayBeOfOneSport()
+    {
+        var book = ConfigurationFolder.With("anchors.csv", $"{Header}anna,,critical_power,250,W,,,,\nanna,,critical_power,210,W,,,,Rowing\n").Anchors;
+
+        Assert.Equal(210, book.On(new LocalDate(2026, 1, 1), "anna", AnchorKind.CriticalPower, new Sport("rowing"))!.Value);
+        Assert.Equal(250, book.On(new LocalDate(2026, 1, 1), "anna", AnchorKind.CriticalPower, new Sport("cycling"))!.Value);
+    }
 }

@@ -38,6 +38,8 @@ public sealed class ConfigurationMistakesTests
         """loadwatch.json:1: layouts[0].kind: "stes" is not one of samples, sessions, sets, tests, days, plan, answers; did you mean "sets"?""")]
     [InlineData("""{ "layouts": [ { "covers": "dtes" } ] }""",
         """loadwatch.json:1: layouts[0].covers: "dtes" is not one of dates, everything; did you mean "dates"?""")]
+    [InlineData("""{ "computation": { "equations": { "heart_rate_max_by_age": "tanka" } } }""",
+        """loadwatch.json:1: computation.equations.heart_rate_max_by_age: "tanka" is not one of tanaka, nes, gellish, gulati, sydo; did you mean "tanaka"?""")]
     [InlineData("""{ "inboxes": [ { "take": "mvoe" } ] }""",
         """loadwatch.json:1: inboxes[0].take: "mvoe" is not one of leave, move; did you mean "move"?""")]
     [InlineData("""{ "contacts": [ { "role": "physio" } ] }""",
@@ -59,6 +61,12 @@ public sealed class ConfigurationMistakesTests
         "loadwatch.json:1: computation.power_bounds: the bounds must rise, the first from above 0")]
     [InlineData("""{ "computation": { "speed_bounds": [-1, 2] } }""",
         "loadwatch.json:1: computation.speed_bounds: the bounds must rise, the first from above 0")]
+    [InlineData("""{ "computation": { "equations": { "lucia_weights": [1, 2] } } }""",
+        "loadwatch.json:1: computation.equations.lucia_weights: wants 3 numbers from 0 to 100")]
+    [InlineData("""{ "computation": { "equations": { "stagno_bounds": [0.6, 0.7, 0.7, 0.8, 0.9] } } }""",
+        "loadwatch.json:1: computation.equations.stagno_bounds: wants 5 numbers from 0 to 1, rising")]
+    [InlineData("""{ "computation": { "equations": { "fast_load_factor": 0.5 } } }""",
+        "loadwatch.json:1: computation.equations.fast_load_factor: 0.5 is outside 1 to 5")]
     [InlineData("""{ "computation": { "speed_max_shares": [0.9, 0.9] } }""",
         "loadwatch.json:1: computation.speed_max_shares: the shares must rise and lie in 0.5 to 1")]
     [InlineData("""{ "computation": { "speed_max_shares": [0.49, 0.9] } }""",

@@ -4,6 +4,7 @@ using System.Text;
 using System.Text.Json;
 using System.Text.Json.Serialization;
 using System.Text.RegularExpressions;
+using LoadWatch.Activities;
 using LoadWatch.Decoding;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.Findings;
@@ -22,13 +23,14 @@ public sealed class ReadmeTests
 {
     private static readonly string Readme = File.ReadAllText(Repository.Config("README.md")).ReplaceLineEndings("\n");
     private static readonly string[] Lines = Readme.Split('\n');
+    private static readonly JsonSerializerOptions Compact = new(ConfigurationJson.Options) { WriteIndented = false };
 
     /// <summary>The records of numbers with the text in front of the table that explains them.</summary>
     public static TheoryData<string, Type> Limits
     {
         get
         {
-            var data = new TheoryData<string, Type> { { "## Intake", typeof(IntakeEntry) }, { "**`quality`**", typeof(QualityLimits) } };
+            var data = new TheoryData<string, Type> { { "## Intake", typeof(IntakeEntry) }, { "**`quality`**", typeof(QualityLimits) }, { "**`equations`**", typeof(EquationChoices) } };
             foreach (var rule in typeof(RuleLimits).GetProperties().Where(property => property.Name != nameof(RuleLimits.Quantities)))
             {
                 data.Add($"**`{KeyOf(rule)}`**", rule.PropertyType);
@@ -52,9 +54,17 @@ public sealed class ReadmeTests
             {
                 Assert.Contains(cells, cell => Regex.IsMatch(cell, $@"^{Invariant(range.Minimum)} to {Invariant(range.Maximum)}($|[,;])"));
             }
+            else if (property.GetCustomAttribute<NumbersAttribute>() is { } numbers)
+            {
+                Assert.Equal($"{Invariant(numbers.Lowest)} to {Invariant(numbers.Highest)} each{(numbers.IsRising ? ", rising" : "")}", cells[2]);
+            }
+            else if (property.PropertyType.IsEnum)
+            {
+                Assert.Contains(cells, cell => ValueCheck.WordsOf(property.PropertyType).All(word => cell.Contains($"`{word}`", StringComparison.Ordinal)));
+            }
             else
             {
-                Assert.True(property.Name is nameof(LoadRatioLimits.Enabled) or nameof(RuleLimits.Quantities), $"{property.Name} has no range");
+                Assert.True(property.PropertyType != typeof(double) && property.PropertyType != typeof(int), $"{property.Name} has no range");
             }
         }
     }
@@ -70,9 +80,10 @@ public sealed class ReadmeTests
     [Fact]
     public void EveryAnchorHasItsUnitAndItsRange()
     {
+        var table = Table("| anchor | unit |").ToList();
         foreach (var kind in AnchorKinds.All)
         {
-            var cells = Row(kind.Name);
+            var cells = Row(kind.Name, table);
             var place = cells[0].Split(", ").ToList().IndexOf($"`{kind.Name}`");
 
             Assert.Contains(kind.Unit, cells[1].Split(", "));
@@ -85,7 +96,7 @@ public sealed class ReadmeTests
     {
         Type[] types =
         [
-            typeof(InboxEntry), typeof(GroupEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(QualityLimits), typeof(CsvLayout), typeof(CsvQuality), typeof(CsvField),
+            typeof(InboxEntry), typeof(GroupEntry), typeof(PersonEntry), typeof(ContactEntry), typeof(ComputationEntry), typeof(QualityLimits), typeof(EquationChoices), typeof(CsvLayout), typeof(CsvQuality), typeof(CsvField),
             typeof(CsvWideEntry),
         ];
         var missing = types
@@ -119,6 +130,7 @@ public sealed class ReadmeTests
             .Concat(DefaultRegions.Sports.Keys)
             .Concat(Enum.GetValues<Channel>().Select(Words.Channel))
             .Concat(ValueCheck.WordsOf(typeof(ContactRole)))
+            .Concat(ValueCheck.WordsOf(typeof(GroupKind)))
             .Concat(ValueCheck.WordsOf(typeof(NamesShown)))
             .Concat(ValueCheck.WordsOf(typeof(AnchorSource)))
             .Concat(ValueCheck.WordsOf(typeof(ArrivalState)))
@@ -183,7 +195,7 @@ public sealed class ReadmeTests
 
     private static string Invariant(object? value) => FormattableString.Invariant($"{value}");
 
-    private static string Json(object? value) => JsonSerializer.Serialize(value);
+    private static string Json(object? value) => JsonSerializer.Serialize(value, Compact);
 
     private static bool IsNamed(string word) => Regex.IsMatch(Readme, $@"`([a-z_]+\.)*\.?{Regex.Escape(word)}`");
 

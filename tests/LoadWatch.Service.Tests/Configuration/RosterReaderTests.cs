@@ -39,21 +39,36 @@ public sealed class RosterReaderTests
             "person,name,group,aliases,heart_rate_valid\nanna,Anna,squad,Ahola A.; 7 |7,no since 2026-03-01\nben,Ben,squad,,No\ncas,Cas,squad,9,yes\n").People;
 
         Assert.Equal(["Ahola A.", "7"], people["anna"].Aliases);
-        Assert.Equal(new NodaTime.LocalDate(2026, 3, 1), people["anna"].HeartRateInvalidFrom);
+        Assert.Equal("2026-03-01", people["anna"].HeartRateInvalid.ToString());
         Assert.False(people["ben"].HeartRateIsValidOn(new NodaTime.LocalDate(1900, 1, 1)));
         Assert.Empty(people["ben"].Aliases);
-        Assert.Null(people["cas"].HeartRateInvalidFrom);
+        Assert.True(people["cas"].HeartRateInvalid.IsEmpty);
+    }
+
+    [Theory]
+    [InlineData("no 2026-02-01 to 2026-04-30", "2026-02-01/2026-04-30")]
+    [InlineData("No 2026-08-01 to 2026-08-10 ; no 2026-02-01 to 2026-04-30;no since 2026-12-01", "2026-02-01/2026-04-30 2026-08-01/2026-08-10 2026-12-01")]
+    [InlineData("no 2026-02-01 to 2026-04-30; no 2026-05-01 to 2026-05-31", "2026-02-01/2026-05-31")]
+    public void HeartRateMaySayNothingForSeveralTimes(string cell, string periods)
+    {
+        var person = ConfigurationFolder.With("roster.csv", $"person,name,group,heart_rate_valid\nanna,Anna,squad,{cell}\n").People["anna"];
+
+        Assert.Equal(periods, person.HeartRateInvalid.ToString());
     }
 
     [Theory]
     [InlineData("medication")]
     [InlineData("no since March")]
     [InlineData("false")]
+    [InlineData("no 2026-04-30 to 2026-02-01")]
+    [InlineData("no 2026-02-01 to 2026-04-30; fever")]
+    [InlineData("no 2026-02-01")]
+    [InlineData(";")]
     public void AReasonIsAFaultThatDoesNotRepeatIt(string cell)
     {
         var fault = Assert.Single(ConfigurationFolder.FaultsWith("roster.csv", $"person,name,group,heart_rate_valid\nanna,Anna,squad,{cell}\n"));
 
-        Assert.Equal("roster.csv:2: heart_rate_valid: holds yes, no, or no since 2026-03-01, and never a reason", fault);
+        Assert.Equal("roster.csv:2: heart_rate_valid: holds yes, no, no since 2026-03-01, or no 2026-02-01 to 2026-04-30, several separated by ;, and never a reason", fault);
     }
 
     [Theory]

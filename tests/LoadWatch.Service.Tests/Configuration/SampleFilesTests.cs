@@ -62,7 +62,7 @@ public sealed class SampleFilesTests
     [Theory]
     [InlineData("roster.csv", "person,name,group,birth_year,sex,time_zone,aliases,heart_rate_valid")]
     [InlineData("devices.csv", "serial,person,from,to,session")]
-    [InlineData("anchors.csv", "person,date,anchor,value,unit,source,exercise,machine")]
+    [InlineData("anchors.csv", "person,date,anchor,value,unit,source,exercise,machine,sport")]
     public void TheSampleTablesHoldEveryColumn(string name, string columns) => Assert.Equal(columns, File.ReadLines(Repository.Config(name)).First());
 
     /// <summary>Path and value of every leaf, so that a difference names its key.</summary>

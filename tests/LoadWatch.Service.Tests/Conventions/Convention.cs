@@ -1,5 +1,6 @@
 using System.ComponentModel.DataAnnotations;
 using System.Reflection;
+using LoadWatch.Activities;
 using Microsoft.Extensions.Logging;
 
 namespace LoadWatch.Service.Tests.Conventions;
@@ -59,7 +60,7 @@ internal static class Convention
     public static IReadOnlyList<string> NumbersWithoutRange(Type options) =>
     [
         .. Inside(options, []).SelectMany(type => type.GetProperties(BindingFlags.Public | BindingFlags.Instance))
-            .Where(property => IsNumeric(property.PropertyType) && property.GetCustomAttribute<RangeAttribute>() is null)
+            .Where(property => IsNumeric(property.PropertyType) && property.GetCustomAttribute<RangeAttribute>() is null && property.GetCustomAttribute<NumbersAttribute>() is null)
             .Select(property => $"{property.DeclaringType!.Name}.{property.Name}")
             .Order(StringComparer.Ordinal),
     ];

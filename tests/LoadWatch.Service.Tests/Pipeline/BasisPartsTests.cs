@@ -8,11 +8,12 @@ namespace LoadWatch.Service.Tests.Pipeline;
 /// </summary>
 public sealed class BasisPartsTests
 {
-    private static readonly string[] OfConfiguration = ["People", "Groups", "Anchors", "Layouts", "Computation", "Devices", "Inboxes"];
+    private static readonly string[] OfConfiguration = ["People", "Groups", "Anchors", "Layouts", "Computation", "Devices", "Inboxes", "LimitsOfPeople"];
 
     private static readonly string[] WithoutRows =
     [
-        "Folder", "Hash", "Text", "DataFolder", "PagesFolder", "NoticesFolder", "Contacts", "ScanEvery", "Settle", "LargestFileBytes", "Mail", "AllowNetworkDataFolder", "Administrators",
+        "Folder", "Hash", "Text", "DataFolder", "PagesFolder", "NoticesFolder", "Contacts", "ScanEvery", "Settle", "LargestFileBytes", "Mail", "Webhook", "AllowNetworkDataFolder", "Administrators",
+        "CommonLimits", // Part of those of the groups.
         "Subjects", // Of people, groups and devices.
     ];
 
@@ -22,11 +23,11 @@ public sealed class BasisPartsTests
 
     [Fact]
     public void EveryPropertyOfAPersonIsInAPart() =>
-        Assert.Equal(Sorted(["Id", "Name", "Group", "BirthYear", "Sex", "Zone", "HeartRateInvalidFrom", "Aliases"]), Properties(typeof(Person)));
+        Assert.Equal(Sorted(["Id", "Name", "Group", "BirthYear", "Sex", "Zone", "DayBeginsAt", "HeartRateInvalid", "Aliases"]), Properties(typeof(Person)));
 
     [Fact]
     public void EveryPropertyOfAGroupIsInAPart() =>
-        Assert.Equal(Sorted(["Id", "Name", "LoadQuantity", "Limits", "LoadFallbacks"]), Properties(typeof(Group)));
+        Assert.Equal(Sorted(["Id", "Name", "LoadQuantity", "Limits", "LoadFallbacks", "DayBeginsAt"]), Properties(typeof(Group)));
 
     [Fact]
     public void EveryPropertyOfAnAnchorIsInItsLine() =>

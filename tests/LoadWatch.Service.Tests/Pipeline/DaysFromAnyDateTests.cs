@@ -40,6 +40,24 @@ public sealed class DaysFromAnyDateTests
         }
     }, iter: Histories);
 
+    /// <summary>What the limits leave open behind any date is the same of the stored days that are read for it as of all.</summary>
+    [Fact]
+    public void WhatTheLimitsLeaveOpenIsTheSameOfStoredDays() => Gen.UInt.Sample(number =>
+    {
+        var history = new RandomHistory(number);
+        var last = RandomHistory.First.PlusDays(RandomHistory.Days - 1);
+        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes());
+        foreach (var cut in Enumerable.Range(0, 6).Select(_ => history.Below(whole.Days.Count)))
+        {
+            var next = whole.Days[cut].Date.PlusDays(1);
+            var first = TodaysLimits.First(history.Changes().Periods, next);
+            var stored = whole.Days.Take(cut + 1).Where(day => day.Date >= first).Select(day => Stored(day.Date == whole.Days[cut].Date ? day : day with { Carried = Carried.Nothing })).ToList();
+            Assert.Equal(
+                JsonSerializer.Serialize(TodaysLimits.Behind(history.Person, history.Group, [.. whole.Days.Take(cut + 1)], history.Plan, history.Changes()), Text),
+                JsonSerializer.Serialize(TodaysLimits.Behind(history.Person, history.Group, stored, From(history.Plan, next), history.Changes()), Text));
+        }
+    }, iter: Histories);
+
     /// <summary>A reference value of a later date changes nothing of an earlier one (I-5).</summary>
     [Fact]
     public void NightByNightTheyAreTheSameAsLookedAtLater() => Gen.UInt.Sample(number =>
@@ -62,7 +80,7 @@ public sealed class DaysFromAnyDateTests
     public void TheHistoriesHoldFindingsOfEveryRule()
     {
         var last = RandomHistory.First.PlusDays(RandomHistory.Days - 1);
-        var found = Enumerable.Range(0, 8)
+        var found = Enumerable.Range(0, 20)
             .Select(number => new RandomHistory((uint)number))
             .SelectMany(history => PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes()).Findings)
             .ToList();

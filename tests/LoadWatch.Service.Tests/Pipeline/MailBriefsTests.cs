@@ -35,7 +35,7 @@ public sealed class MailBriefsTests : IDisposable
     }
 
     [Theory]
-    [InlineData("initials", "- A. (warning)")]
+    [InlineData("initials", "- A. (warning, ")]
     [InlineData("none", "The page has the rest.")]
     public void WhatLeavesTheMachineHoldsTheNamesThatTheContactAsksFor(string names, string expected)
     {
@@ -50,16 +50,29 @@ public sealed class MailBriefsTests : IDisposable
         Assert.Equal(2, mails.Count);
         Assert.All(mails, mail => Assert.Contains(expected, mail.TextBody, StringComparison.Ordinal));
         Assert.All(mails, mail => Assert.DoesNotMatch("(?i)\\b(ann|ben)\\b", mail.TextBody + mail.HtmlBody));
-        Assert.All(Pending(), pending => Assert.Contains("- Ann (warning)", pending.Notice.Text, StringComparison.Ordinal));
+        Assert.All(Pending(), pending => Assert.Contains("- Ann (warning, ", pending.Notice.Text, StringComparison.Ordinal));
         Assert.All(Pending(), pending => Assert.Contains("<h3>Ann</h3>", pending.Notice.Html, StringComparison.Ordinal));
     }
 
     [Fact]
-    public void FullNamesAreKeptOnce()
+    public void ATextWithFullNamesIsKeptOnce()
     {
         Decide(Morning);
 
-        Assert.All(Pending(), pending => Assert.Equal((null, null), (pending.Notice.MailText, pending.Notice.MailHtml)));
+        Assert.All(Pending(), pending => Assert.Null(pending.Notice.MailText));
+    }
+
+    [Fact]
+    public void TheMailIsFrozenWithItsPicturesAndThePageStaysOutOfIt()
+    {
+        Raise("ann");
+        Decide(Morning);
+
+        var mail = Pending().Single(pending => pending.Delivery == Mail);
+        Assert.Contains("<img src=\"data:image/png;base64,", mail.Notice.MailHtml, StringComparison.Ordinal);
+        Assert.DoesNotContain("<svg", mail.Notice.MailHtml, StringComparison.Ordinal);
+        var parts = MailMessageWriter.Write(mail.Notice, "ada@example.org", "brief@example.org").BodyParts;
+        Assert.Equal(["text/plain", "text/html", "image/png"], parts.Select(part => part.ContentType.MimeType));
     }
 
     [Theory]

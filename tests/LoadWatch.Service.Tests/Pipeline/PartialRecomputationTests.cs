@@ -24,6 +24,9 @@ public sealed class PartialRecomputationTests : IDisposable
 
         """;
 
+    /// <summary>With one object in it or none.</summary>
+    private const string Computation = "\"computation\": \\{([^{}]|\\{[^}]*\\})*\\}";
+
     /// <summary>Every kind of change, each with what it does to the files of the configuration.</summary>
     private static readonly (string Name, Action<WorkingFolder, int> Make)[] Changes =
     [
@@ -34,13 +37,16 @@ public sealed class PartialRecomputationTests : IDisposable
         ("sex", (folder, number) => folder.Replace("roster.csv", "(anna,Anna Ahola,[a-z]+,[0-9]+),[fm]?", $"$1,{(number % 2 == 0 ? "m" : "")}")),
         ("zone", (folder, number) => folder.Replace("roster.csv", "(bo,Bo Björk,[a-z]+,[0-9]+,[fm]?),[^,]*", $"$1,{(number % 2 == 0 ? "Pacific/Auckland" : "America/New_York")}")),
         ("heart rate", (folder, number) => folder.Replace("roster.csv", "(anna,.*),[^,\n]*\n", $"$1,no since 2026-06-{(number % 5) + 4:00}\n")),
+        ("heart rate for a time", (folder, number) => folder.Replace("roster.csv", "(anna,.*),[^,\n]*\n", $"$1,no 2026-06-{(number % 4) + 3:00} to 2026-06-{(number % 3) + 7:00}\n")),
+        ("day begins", (folder, number) => folder.Replace("loadwatch.json", "\"name\": \"Squad\"(, \"day_begins_at\": \"[0-9:]*\")?", $"\"name\": \"Squad\", \"day_begins_at\": \"{(number % 3) * 4:00}:30\"")),
         ("alias", (folder, _) => folder.Replace("roster.csv", "(cara,Cara Costa,[a-z]+,[0-9]+,[fm]?,[^,]*),[^,]*", "$1,stranger")),
         ("newcomer", (folder, number) => folder.Append("roster.csv", $"dora{number},Dora Dahl {number},squad,1999,f,UTC,,\n")),
         ("leaver", (folder, _) => folder.Leave("bo")),
         ("other group", (folder, _) => folder.Replace("roster.csv", "(cara,Cara Costa),[a-z]+", "$1,class")),
         ("limits", (folder, number) => folder.Replace("loadwatch.json", "\"silence\": \\{[^}]*\\}", $"\"silence\": {{ \"enabled\": {(number % 2 == 0 ? "true" : "false")} }}")),
         ("load", (folder, _) => folder.Replace("loadwatch.json", "\"load_quantity\": \"[a-z_]+\"", "\"load_quantity\": \"edwards_load\"")),
-        ("bounds", (folder, number) => folder.Replace("loadwatch.json", "\"computation\": \\{[^}]*\\}", $"\"computation\": {{ \"speed_bounds\": [2, {(number % 3) + 3}] }}")),
+        ("equations", (folder, number) => folder.Replace("loadwatch.json", Computation, $"\"computation\": {{ \"equations\": {{ \"banister_men\": [0.6{number % 3}, 1.9], \"banister_women\": [0.8, 1.7{number % 3}], \"heart_rate_max_by_age\": \"{(number % 2 == 0 ? "nes" : "gellish")}\" }} }}")),
+        ("bounds", (folder, number) => folder.Replace("loadwatch.json", Computation, $"\"computation\": {{ \"speed_bounds\": [2, {(number % 3) + 3}] }}")),
         ("layout", (folder, _) => folder.Replace("loadwatch.json", "\"sport\": \"[a-z]+\"", "\"sport\": \"rugby\"")),
         ("device", (folder, number) => folder.Write("devices.csv", $"serial,person,from,to,session\n4711,{(number % 2 == 0 ? "anna" : "cara")},,,\n")),
         ("file names", (folder, number) => folder.Replace("loadwatch.json", "\"take\": \"leave\"(, \"file_pattern\": \"[^\"]*\")?", $"\"take\": \"leave\", \"file_pattern\": \"{(number % 2 == 0 ? "{person}*" : "*{person}")}\"")),
@@ -91,6 +97,17 @@ public sealed class PartialRecomputationTests : IDisposable
         folder.Replace("loadwatch.json", "\"brief_at\": \"05:00\"", "\"brief_at\": \"05:30\"");
         var report = folder.Sweep();
         Assert.Equal((0, 0), (report.Recomputed, report.PeopleComputed));
+    }
+
+    /// <summary>Behind the end of the time nothing is decoded again.</summary>
+    [Fact]
+    public void ATimeWithoutHeartRateDecodesItsOwnRecordingsAlone()
+    {
+        folder.Replace("roster.csv", "(anna,.*),[^,\n]*\n", "$1,no 2026-06-04 to 2026-06-05\n");
+        var report = folder.Sweep();
+        var near = folder.Activities("anna").Count(activity => string.CompareOrdinal(activity.GetProperty("date").GetString(), "2026-06-02") >= 0 && string.CompareOrdinal(activity.GetProperty("date").GetString(), "2026-06-07") <= 0);
+        Assert.InRange(report.Recomputed, 1, near + 3);
+        Assert.True(report.Recomputed < folder.Activities("anna").Count, "everything of hers was decoded");
     }
 
     [Fact]
@@ -193,7 +210,7 @@ public sealed class PartialRecomputationTests : IDisposable
     {
         string[] tables =
         [
-            "recording", "activity", "histogram", "day", "finding", "question", "content_question", "table_row", "table_content",
+            "recording", "activity", "histogram", "best_mean", "anchor_observed", "day", "todays_room", "finding", "question", "content_question", "table_row", "table_content",
             "arrival",
         ];
         using var connection = new SqliteConnection($"Data Source={Path.Combine(folder.Data, "loadwatch.db")};Pooling=False;Mode=ReadOnly");

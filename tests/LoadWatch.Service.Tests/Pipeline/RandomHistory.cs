@@ -30,7 +30,7 @@ internal sealed class RandomHistory
         state = number + 0x9E3779B97F4A7C15UL;
         Person = new Person("anna", "Anna", "squad", Below(2) == 0 ? 1950 : 1990, null, DateTimeZone.Utc)
         {
-            HeartRateInvalidFrom = Below(4) == 0 ? First.PlusDays(Below(Days)) : null,
+            HeartRateInvalid = Below(3) == 0 ? DatePeriods.Of(Enumerable.Range(0, 1 + Below(3)).Select(_ => Invalid())) : DatePeriods.Never,
         };
         Group = MakeGroup();
         Sessions = [.. Stretches().SelectMany(DaysOf)];
@@ -74,6 +74,12 @@ internal sealed class RandomHistory
     {
         Quantities = [.. session.Quantities.Select(quantity => quantity with { Value = Significant.Round(quantity.Value * (0.5 + (Below(150) / 100.0))) })],
     };
+
+    private DatePeriod Invalid()
+    {
+        var from = First.PlusDays(Below(Days));
+        return new DatePeriod(from, Below(3) == 0 ? null : from.PlusDays(Below(200)));
+    }
 
     private Group MakeGroup()
     {

@@ -54,7 +54,7 @@ internal static class RandomReferences
         Quantities =
         [
             .. session.Quantities.Where(quantity => !QuantityNames.IsOfHeartRate(quantity.Name))
-                .Concat(HeartRateLoads.Of(heartRate, session.Date, person, anchors).Quantities)
+                .Concat(HeartRateLoads.Of(heartRate, session.Date, person, anchors, new()).Quantities)
                 .OrderBy(quantity => quantity.Name, StringComparer.Ordinal),
         ],
     };

@@ -172,7 +172,7 @@ public sealed class ReferenceChangesTests
     [Fact]
     public void WhereHeartRateIsNotValidItsValuesChangeNothing()
     {
-        var person = Anna with { HeartRateInvalidFrom = First.PlusDays(40) };
+        var person = Anna with { HeartRateInvalid = DatePeriods.Since(First.PlusDays(40)) };
         var group = Squad with { LoadFallbacks = [QuantityNames.FosterLoad] };
         Ride[] rides = [.. Enumerable.Range(0, 100).Select(day => new Ride(day, 50 + (day * 7 % 23), 140) { IsRated = true })];
 

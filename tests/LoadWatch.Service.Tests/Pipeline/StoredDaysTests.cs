@@ -162,7 +162,7 @@ public sealed class StoredDaysTests
     {
         using var connection = new SqliteConnection($"Data Source={Path.Combine(folder.Data, "loadwatch.db")};Pooling=False");
         connection.Open();
-        return string.Join('\n', new[] { "day", "finding", "question" }.SelectMany(table => Rows(connection, table)));
+        return string.Join('\n', new[] { "day", "finding", "question", "todays_room" }.SelectMany(table => Rows(connection, table)));
     }
 
     private static List<string> Rows(SqliteConnection connection, string table)

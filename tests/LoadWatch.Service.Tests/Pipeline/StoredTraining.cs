@@ -24,7 +24,7 @@ internal static class StoredTraining
         var heartRate = RandomReferences.HeartRate(minutes, 120 + date.Day);
         Put(session, person.Id, date, new ActivityValues
         {
-            Quantities = [.. HeartRateLoads.Of(heartRate, date, person, anchors).Quantities.OrderBy(quantity => quantity.Name, StringComparer.Ordinal)],
+            Quantities = [.. HeartRateLoads.Of(heartRate, date, person, anchors, new()).Quantities.OrderBy(quantity => quantity.Name, StringComparer.Ordinal)],
             Histograms = new Dictionary<Channel, Histogram> { [Channel.HeartRate] = heartRate },
         });
     }

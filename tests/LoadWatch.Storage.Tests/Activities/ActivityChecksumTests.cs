@@ -1,4 +1,5 @@
 using LoadWatch.Activities;
+using LoadWatch.Capacity;
 using LoadWatch.Quality;
 using LoadWatch.Recordings;
 using LoadWatch.Storage.Activities;
@@ -43,6 +44,8 @@ public sealed class ActivityChecksumTests : StoreTest
     [InlineData("UPDATE activity SET date = '2026-03-09'")]
     [InlineData("UPDATE histogram SET bins = X'0401'")]
     [InlineData("DELETE FROM histogram")]
+    [InlineData("UPDATE best_mean SET means = zeroblob(8)")]
+    [InlineData("DELETE FROM best_mean")]
     public void AChangedCellIsFoundThoughTheEngineFindsNothing(string change)
     {
         Run(change);
@@ -79,6 +82,7 @@ public sealed class ActivityChecksumTests : StoreTest
                 HeartRateMaxBpm = 181,
                 PowerMaxWatts = 0.1 + 0.2,
                 Histograms = new Dictionary<Channel, Histogram> { [Channel.HeartRate] = histogram, [Channel.Power] = histogram },
+                BestMeans = new Dictionary<Channel, BestMeans> { [Channel.Power] = new([412.5, 390, 0.1 + 0.2]) },
                 Quantities = [Some.Quantity("minutes", 61)],
                 Cuts = [new Cut(null, CutReason.Gap, new Stretch(1, 2), 0, 1, 0.5)],
                 Remarks = ["cut to the planned session"],

@@ -1,5 +1,4 @@
 using System.Globalization;
-using LoadWatch.Notices;
 
 namespace LoadWatch.Decoding.Csv.Drafts;
 

@@ -1,0 +1,53 @@
+using LoadWatch.Loads;
+using LoadWatch.People;
+using NodaTime;
+
+namespace LoadWatch.Anchors;
+
+/// <summary>An observed value that contradicts a measured one. The measured one is used; this is shown, so that somebody may test again.</summary>
+public sealed record AnchorContradiction(ObservedAnchor Observed, Anchor Measured)
+{
+    /// <summary>
+    /// Those that hold on a date, in the order of the kinds. A regression may contradict either way; a best only by being higher, since who has not tried shows less.
+    /// W' and D' are too unsure to contradict anything.
+    /// </summary>
+    /// <param name="observed">Of one person.</param>
+    /// <param name="stated">The person's anchors of the configuration and of tables.</param>
+    public static IReadOnlyList<AnchorContradiction> On(LocalDate date, IEnumerable<ObservedAnchor> observed, AnchorBook stated) =>
+    [
+        .. observed.Where(one => one.From <= date)
+            .GroupBy(one => one.Of)
+            .Select(same => same.MaxBy(one => one.From)!)
+            .Select(one => (Observed: one, Measured: stated.MeasuredOn(date, one.ToAnchor())))
+            .Where(pair => pair.Measured is not null && IsBeyond(pair.Observed, pair.Measured))
+            .Select(pair => new AnchorContradiction(pair.Observed, pair.Measured!))
+            .OrderBy(one => one.Observed.Kind).ThenBy(one => one.Observed.Sport, StringComparer.Ordinal)
+            .ThenBy(one => one.Observed.Exercise, StringComparer.Ordinal).ThenBy(one => one.Observed.Machine, StringComparer.Ordinal),
+    ];
+
+    /// <summary>One sentence, without a full stop.</summary>
+    public string Words
+    {
+        get
+        {
+            var unit = AnchorKinds.Of(Observed.Kind).Unit;
+            var of = Observed switch
+            {
+                { Sport: { } sport } => $" ({sport})",
+                { Exercise: { } exercise, Machine: null } => $" of {exercise.Replace('_', ' ')}",
+                { Exercise: { } exercise, Machine: { } machine } => $" of {exercise.Replace('_', ' ')} on {machine.Replace('_', ' ')}",
+                _ => "",
+            };
+            var measured = Measured.Date is { } date ? FormattableString.Invariant($"measured on {date:yyyy-MM-dd}") : "measured";
+            return FormattableString.Invariant(
+                $"{ReferenceWords.Of(Observed.Kind)}{of}: {Measured.Value:0.##} {unit} {measured}, own sessions up to {Observed.ShownOn:yyyy-MM-dd} show {Observed.Value:0.##} (within {Observed.Error:0.##}): the measured one is used; measure again?");
+        }
+    }
+
+    private static bool IsBeyond(ObservedAnchor observed, Anchor measured) => observed.Kind switch
+    {
+        AnchorKind.CriticalPower or AnchorKind.CriticalSpeed => Math.Abs(observed.Value - measured.Value) > observed.Error,
+        AnchorKind.WPrime or AnchorKind.DPrime => false,
+        _ => observed.Value - measured.Value > observed.Error,
+    };
+}

@@ -1,0 +1,33 @@
+namespace LoadWatch.Findings;
+
+/// <summary>Why the rule <see cref="FallingCapacityRule"/> may ask for attention, and its words.</summary>
+internal sealed class FallingCapacityRecord : RuleRecord
+{
+    public override string Says => "a best of late below the best before";
+
+    public override string Cause => "No all-out try lately, less heavy or fast work, fatigue, another device or machine.";
+
+    public override string Consequence => "Limits and loads that rest on the old best say less.";
+
+    public override string TimeToRespond => "Within two weeks, by a try under the same conditions.";
+
+    public override string Decides => KeyWords.CoachAndPerson;
+
+    public override string Ends => "The fall is clearly within the error again, read on recorded days.";
+
+    public override string DataNeeded => "Sessions with the quantity in both stretches, of one sport.";
+
+    public override string Basis =>
+        "Stretches and errors of speed and power are a choice; the error of an estimated maximum is 10.6 to 13.5 % of the mean in direct tests.";
+
+    public override int Rank => 8;
+
+    public override string Counted(FindingKey key) => "with a best of late below the best before";
+
+    public override string Named(FindingKey key, bool self) => $"{KeyWords.Best(key)} of late below {KeyWords.Your(self)} best before";
+
+    public override string Response(FindingKey key, bool self) => "whether an all-out try was made lately; if so, what else went on, before changing anything.";
+
+    public override string Returned(FindingKey key, RuleLimits limits, bool self) =>
+        $"{KeyWords.Best(key)} is no longer below the best before";
+}

@@ -1,0 +1,35 @@
+namespace LoadWatch.Findings;
+
+/// <summary>Why the rule <see cref="FallingLoadRule"/> may ask for attention, and its words.</summary>
+internal sealed class FallingLoadRecord : RuleRecord
+{
+    public override string Says => "the usual load is fading";
+
+    public override string Cause => "Less time, less will, a change of work or family, a device that no longer records everything.";
+
+    public override string Consequence => "What was built up fades over weeks; going back up takes as long.";
+
+    public override string TimeToRespond => "Within a week.";
+
+    public override string Decides => KeyWords.CoachAndPerson;
+
+    public override string Ends => "The mean week of the last 14 days is back at its return value, on readable dates.";
+
+    public override string DataNeeded => "Known load on 10 of the 14 days, and 6 ordinary weeks among the 8 before.";
+
+    public override string Basis =>
+        "Spiering, Mujika, Sharp and Foulis 2021, J Strength Cond Res 35:1449-1458, for about a third; the other limits are a choice.";
+
+    public override int Rank => 7;
+
+    public override string Counted(FindingKey key) => $"well below their usual{KeyWords.Measure(key)}";
+
+    public override string Named(FindingKey key, bool self) => $"{KeyWords.Load(key)} well below {KeyWords.Your(self)} usual";
+
+    public override string Response(FindingKey key, bool self) => self
+        ? "whether less was meant; if not, going back up in small steps, no catching up."
+        : "asking whether less was meant; if not, going back up in small steps, no catching up.";
+
+    public override string Returned(FindingKey key, RuleLimits limits, bool self) =>
+        FormattableString.Invariant($"{KeyWords.Load(key)} is back at {100 * limits.FallingLoad.Return:0.##} % of {KeyWords.Your(self)} usual or above");
+}

@@ -1,0 +1,33 @@
+namespace LoadWatch.Findings;
+
+/// <summary>Why the rule <see cref="LoadRatioRule"/> may ask for attention, and its words.</summary>
+internal sealed class LoadRatioRecord : RuleRecord
+{
+    public override string Says => "acute load well above the usual";
+
+    public override string Cause => "A camp, a congested calendar, a return to full training in large steps, or sessions added beside the plan.";
+
+    public override string Consequence => "The rise goes on; by the fourth week the high load has become the usual that everything is compared with.";
+
+    public override string TimeToRespond => "Before the next hard session, within a day.";
+
+    public override string Decides => KeyWords.CoachAndPerson;
+
+    public override string Ends => "The ratio falls below its return value, on readable dates.";
+
+    public override string DataNeeded => "Known load on most of the last 7 and of the last 28 days, and four weeks since the first known day.";
+
+    public override string Basis =>
+        "Windt and Gabbett 2018, Br J Sports Med 53:988-990, for the uncoupled ratio; that it is watched, its limit, coverage and return value are a choice. It describes change, nothing else.";
+
+    public override int Rank => 0;
+
+    public override string Counted(FindingKey key) => $"well above their usual{KeyWords.Measure(key)}";
+
+    public override string Named(FindingKey key, bool self) => $"{KeyWords.Load(key)} well above {KeyWords.Your(self)} usual";
+
+    public override string Response(FindingKey key, bool self) => $"comparing with what {(self ? "you had" : "was")} planned: an easier day, or keeping the plan if it was meant.";
+
+    public override string Returned(FindingKey key, RuleLimits limits, bool self) =>
+        FormattableString.Invariant($"{KeyWords.Load(key)} is back within {limits.LoadRatio.Return:0.##} times {KeyWords.Your(self)} usual week");
+}

@@ -1,0 +1,35 @@
+namespace LoadWatch.Findings;
+
+/// <summary>Why the rule <see cref="SilenceRule"/> may ask for attention, and its words.</summary>
+internal sealed class SilenceRecord : RuleRecord
+{
+    public override string Says => "expected recordings did not come";
+
+    public override string Cause => "A dead strap, watch or upload; somebody who stopped coming; an inbox that is away.";
+
+    public override string Consequence => "Nothing else can be said of the person: every other rule waits.";
+
+    public override string TimeToRespond => "Within two days.";
+
+    public override string Decides => "the person; whoever looks after devices and uploads";
+
+    public override string Ends => "The next recording.";
+
+    public override string DataNeeded => "The person's own rhythm of 6 gaps or more, or a plan that says which sessions bring a recording.";
+
+    public override string Basis =>
+        "A choice.";
+
+    public override int Rank => 3;
+
+    public override string Counted(FindingKey key) => "silent";
+
+    public override string Named(FindingKey key, bool self) => "expected recordings missing";
+
+    public override string Response(FindingKey key, bool self) => self
+        ? "a look at strap, watch and upload if you did train: one of them may have failed."
+        : "asking whether training went on; a strap, watch or upload may have failed.";
+
+    public override string Returned(FindingKey key, RuleLimits limits, bool self) =>
+        "recordings are coming in again";
+}

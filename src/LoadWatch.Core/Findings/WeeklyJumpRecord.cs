@@ -1,0 +1,33 @@
+namespace LoadWatch.Findings;
+
+/// <summary>Why the rule <see cref="WeeklyJumpRule"/> may ask for attention, and its words.</summary>
+internal sealed class WeeklyJumpRecord : RuleRecord
+{
+    public override string Says => "this week far above the last";
+
+    public override string Cause => "Two weeks of training in one, or sessions moved into the same week.";
+
+    public override string Consequence => "The next week is planned from a week that was no ordinary one.";
+
+    public override string TimeToRespond => "Before the next week is planned, within two days.";
+
+    public override string Decides => KeyWords.CoachAndPerson;
+
+    public override string Ends => "The change against the last ordinary week falls below its return value, on readable dates.";
+
+    public override string DataNeeded => "Known load on most days of this week and of the ordinary weeks before.";
+
+    public override string Basis =>
+        "That weekly changes are kept small is advice of Soligard et al. 2016, Br J Sports Med 50:1030-1041 (from memory; the evidence is weak). Every number is a choice.";
+
+    public override int Rank => 4;
+
+    public override string Counted(FindingKey key) => $"with a week far above the last{KeyWords.By(key)}";
+
+    public override string Named(FindingKey key, bool self) => $"{KeyWords.Load(key)} of a week far above the last";
+
+    public override string Response(FindingKey key, bool self) => $"comparing with what {(self ? "you had" : "was")} planned: spreading the rise over more weeks, or keeping the plan if it was meant.";
+
+    public override string Returned(FindingKey key, RuleLimits limits, bool self) =>
+        $"{KeyWords.Load(key)} of the week is no longer far above the last";
+}

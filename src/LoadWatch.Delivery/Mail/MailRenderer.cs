@@ -1,0 +1,16 @@
+using LoadWatch.Delivery.Page;
+using LoadWatch.Notices;
+
+namespace LoadWatch.Delivery.Mail;
+
+/// <summary>
+/// A brief as the HTML of a mail, in what the common mail programs show: plain blocks and tables, styles on the elements, bitmaps. It says what
+/// <see cref="BriefText"/> says, sentence by sentence. Its pictures stand in it as data until the message is written, so one text freezes the whole of it (I-7).
+/// </summary>
+public static class MailRenderer
+{
+    private static readonly LiquidTemplate Template = new("Mail.mail");
+
+    /// <summary>The same brief gives the same bytes, in every culture.</summary>
+    public static string Render(Brief brief) => Template.Render(PageModel.Of(brief));
+}

@@ -1,0 +1,44 @@
+using LoadWatch.Days;
+using LoadWatch.Limits;
+using LoadWatch.Loads;
+using LoadWatch.People;
+using LoadWatch.Plans;
+using LoadWatch.Service.Configuration;
+using LoadWatch.Storage;
+using NodaTime;
+
+namespace LoadWatch.Service.Pipeline;
+
+/// <summary>What the limits leave open on a date, from the days before it as they are stored.</summary>
+public sealed class TodaysLimits(WorkingConfiguration configuration, TableBasis basis)
+{
+    /// <summary>Null where the date before it is not computed.</summary>
+    public TodaysRoom? Of(StoreSession session, Person person, LocalDate date)
+    {
+        var group = configuration.GroupOf(person);
+        var periods = ReferencePeriods.Of(person, group, basis.AnchorsOf(person));
+        var days = session.Days.Before(person.Id, date, First(periods, date));
+        if (days.Count == 0 || days[^1].Date != date.PlusDays(-1))
+        {
+            return null;
+        }
+
+        var changes = new ReferenceChanges(periods, () => new RestatedSessions(
+            person, basis.AnchorsOf(person), configuration.Computation, periods.Quantities, session.Activities.Histograms(person.Id, days[0].Date, date)));
+        return Behind(person, group, days, new PersonPlans(configuration).Of(session, person, date, date), changes);
+    }
+
+    /// <summary>The first of the days that are looked back at from a date.</summary>
+    public static LocalDate First(ReferencePeriods periods, LocalDate date) => periods.Reach(date) ?? date.PlusDays(-LoadCalendar.LookBackDays);
+
+    /// <summary>Of the date behind some days, by the reference values of that date (I-15). Pure.</summary>
+    /// <param name="days">Unbroken, with their sessions; as many as are looked back at.</param>
+    /// <param name="plan">What is said of the date.</param>
+    /// <param name="changes">Null: no reference value ever changes.</param>
+    public static TodaysRoom Behind(Person person, Group group, IReadOnlyList<Day> days, PersonPlan plan, ReferenceChanges? changes = null)
+    {
+        var date = days[^1].Date.PlusDays(1);
+        var view = changes is null ? null : new SeriesByValues(person, group, changes, changes.Periods.On(date));
+        return RoomFinder.Of(person, group, view is null ? days : view.Before(days, date), plan);
+    }
+}

@@ -1,0 +1,94 @@
+using LoadWatch.Findings;
+using LoadWatch.Stimulus;
+
+namespace LoadWatch.Tests.Findings;
+
+public class RuleRecordTests
+{
+    [Fact]
+    public void EveryRuleSaysWhyItMayAskForAttention() => Assert.All(RuleBook.All, rule =>
+    {
+        Assert.Empty(rule.Record.Missing(rule.Name));
+        Assert.Equal(
+            ["cause", "consequence", "response", "time to respond", "who decides", "ends", "data needed", "basis"],
+            rule.Record.Fields(rule.Name).Select(field => field.Name));
+        Assert.EndsWith(".", rule.Record.Basis, StringComparison.Ordinal);
+    });
+
+    [Fact]
+    public void ARuleWithABlankPartCannotBeRegistered()
+    {
+        var refused = Assert.Throws<ArgumentException>(() => RuleBook.Registered(new LoadRatioRule(), new Bare()));
+
+        Assert.StartsWith("bare has no cause; bare has no time to respond", refused.Message, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void TwoRulesOfOneNameCannotBeRegistered() =>
+        Assert.StartsWith(
+            "name silence stands twice; rank 3 stands twice",
+            Assert.Throws<ArgumentException>(() => RuleBook.Registered(new SilenceRule(), new SilenceRule())).Message,
+            StringComparison.Ordinal);
+
+    /// <summary>I-13.</summary>
+    [Theory]
+    [InlineData("risk")]
+    [InlineData("injur")]
+    [InlineData("readiness")]
+    [InlineData("debt")]
+    [InlineData("safe")]
+    [InlineData("danger")]
+    [InlineData("diagnos")]
+    [InlineData("must")]
+    public void WordsDescribeChangeOnly(string word) => Assert.All(
+        RuleBook.All.SelectMany(rule => rule.Record.Fields(rule.Name).Select(field => field.Text).Append(rule.Record.Says)),
+        text => Assert.DoesNotContain(word, text, StringComparison.OrdinalIgnoreCase));
+
+    [Fact]
+    public void OnlyRulesOfTestsAreOfHealth() =>
+        Assert.Equal(["function_test", "test_overdue"], RuleBook.All.Where(rule => rule.Record.IsOfHealth).Select(rule => rule.Name));
+
+    [Fact]
+    public void WordsNameTheRegion() =>
+        Assert.Equal("no heavy or fast arm work lately", RuleBook.Of("stimulus_gap")!.Record.Named(new FindingKey("a", "stimulus_gap", BodyRegion.Arms), self: false));
+
+    private sealed class Bare : IRule
+    {
+        public string Name => "bare";
+
+        public RuleRecord Record { get; } = new BareRecord();
+
+        public IRuleLimits LimitsOf(RuleLimits limits) => limits.Silence;
+
+        public IEnumerable<Finding> Evaluate(RuleSubject subject) => [];
+    }
+
+    private sealed class BareRecord : RuleRecord
+    {
+        public override string Says => "bare";
+
+        public override string Cause => " ";
+
+        public override string Consequence => "some";
+
+        public override string TimeToRespond => "";
+
+        public override string Decides => "some";
+
+        public override string Ends => "some";
+
+        public override string DataNeeded => "some";
+
+        public override string Basis => "some";
+
+        public override int Rank => 99;
+
+        public override string Counted(FindingKey key) => "some";
+
+        public override string Named(FindingKey key, bool self) => "some";
+
+        public override string Response(FindingKey key, bool self) => "some";
+
+        public override string Returned(FindingKey key, RuleLimits limits, bool self) => "some";
+    }
+}

@@ -1,0 +1,150 @@
+using LoadWatch.Anchors;
+using LoadWatch.Decoding.Fit;
+using LoadWatch.People;
+using LoadWatch.Recordings;
+using LoadWatch.Service.Explain;
+using LoadWatch.Storage.Activities;
+using NodaTime;
+
+namespace LoadWatch.Service.Tests.Pipeline;
+
+/// <summary>Reference values from own sessions, from the files to what is computed by them.</summary>
+public sealed class ObservedAnchorsTests : IDisposable
+{
+    private static readonly LocalDate June = new(2026, 6, 1);
+
+    private static readonly LocalDate Shown = new(2026, 6, 8);
+
+    private readonly WorkingFolder folder = new();
+
+    public void Dispose() => folder.Dispose();
+
+    /// <summary>By hand: W = 18 kJ + 250 W t at 120, 300 and 720 s, each within a ride of 25 minutes.</summary>
+    [Fact]
+    public void EffortsOfAMonthGiveTheNextMonthsCapacity()
+    {
+        folder.Fill(Season());
+        folder.Sweep();
+
+        var observed = Observed();
+        Assert.Equal([AnchorKind.CriticalPower, AnchorKind.WPrime, AnchorKind.PowerMax], observed.Select(one => one.Kind).Order());
+        Assert.All(observed, one => Assert.Equal((June, "cycling"), (one.From, one.Sport)));
+        Assert.Equal((250, 18_000, 400), (Value(observed, AnchorKind.CriticalPower), Value(observed, AnchorKind.WPrime), Value(observed, AnchorKind.PowerMax)));
+        Assert.Equal([false, false, false, true], Rides().Select(HasPowerZones));
+        Assert.Contains("from own sessions critical_power cycling = 250 W (within 5) from 2026-06-01 on, used: work on time, 3 bests of 120 to 720 s from 3 sessions", Explained(Shown));
+    }
+
+    [Fact]
+    public void ARebuildGivesTheSameRows()
+    {
+        folder.Fill(Season());
+        folder.Sweep();
+        var (before, observed) = (folder.Everything(), Observed());
+
+        folder.Rebuild();
+
+        Assert.Equal(before, folder.Everything());
+        Assert.Equal(observed, Observed());
+        Assert.Equal(0, folder.Sweep().Recomputed);
+    }
+
+    [Fact]
+    public void NeitherOrderNorNightsMatter()
+    {
+        folder.Fill(Season());
+        folder.Sweep();
+        using var other = new WorkingFolder();
+        foreach (var (file, night) in Season().Reverse().Select((file, night) => (file, night)))
+        {
+            other.Fill([file]);
+            other.Sweep(WorkingFolder.Now - Duration.FromDays(4 - night));
+        }
+
+        other.Sweep();
+
+        Assert.Equal(Observed(), Observed(other));
+        Assert.Equal(folder.Export("activities"), other.Export("activities"));
+        Assert.Equal(folder.Export("days"), other.Export("days"));
+    }
+
+    /// <summary>The ride of June is computed again when the last of the efforts of May comes late.</summary>
+    [Fact]
+    public void ALateFileChangesWhatComesBehindItsMonth()
+    {
+        folder.Fill(Season().Skip(1));
+        folder.Sweep();
+        Assert.DoesNotContain(true, Rides().Select(HasPowerZones));
+
+        folder.Fill(Season().Take(1));
+        folder.Sweep();
+
+        Assert.Equal([false, false, false, true], Rides().Select(HasPowerZones));
+    }
+
+    [Fact]
+    public void AMeasuredValueWinsAndTheContradictionIsShown()
+    {
+        folder.Write("anchors.csv", $"{WorkingFolder.Anchors.TrimEnd()}\nanna,2026-05-30,critical_power,300,W,,\n");
+        folder.Fill(Season());
+        folder.Sweep();
+
+        Assert.Equal(250, Value(Observed(), AnchorKind.CriticalPower));
+        Assert.Equal(255, Assert.Single(Rides()[^1].Values.TimesInZone, zone => zone.Channel == Channel.Power).Bounds[1]);
+        const string Sentence = "critical power (cycling): 300 W measured on 2026-05-30, own sessions up to 2026-05-20 show 250 (within 5): the measured one is used; measure again?";
+        Assert.Contains(Sentence[1..], folder.Brief());
+        Assert.Contains(Sentence, Explained(Shown));
+        Assert.Contains("on, not used, one is measured: work on time", Explained(Shown));
+    }
+
+    [Fact]
+    public void AHighestHeartRateOfTwoSessionsReplacesThatOfAge()
+    {
+        folder.Write("anchors.csv", "person,date,anchor,value,unit,source,exercise\nanna,,heart_rate_rest,50,bpm,,\n");
+        folder.Fill([Heart(4, 170), Heart(11, 188), Heart(18, 189), ("anna/june.fit", Some.Fit(Shown))]);
+        folder.Sweep();
+        var lower = Trimp();
+
+        folder.Fill([Heart(25, 192), Heart(26, 192)]);
+        folder.Sweep();
+
+        // Born in 1996 she is 30: 208 - 0.7 x 30 = 187, and only what is above 190 says more.
+        Assert.Equal(202, Value(Observed(), AnchorKind.HeartRateMax));
+        Assert.True(Trimp() < lower, $"{Trimp()} and {lower}");
+    }
+
+    /// <summary>Within the two minutes heart rate rises by one in ten seconds: the best 15 s are 5 at 10 and 10 at 11 above its beginning, 10.67.</summary>
+    private static (string Path, byte[] Bytes) Heart(int day, int beginning) => ($"anna/may{day}.fit", Some.Fit(new LocalDate(2026, 5, day), heartRate: beginning));
+
+    private double Trimp() => folder.Activities("anna")[^1].Value("banister_trimp")!.Value;
+
+    private static IReadOnlyList<(string Path, byte[] Bytes)> Season() =>
+    [
+        ("anna/a.fit", Ride(new LocalDate(2026, 5, 6), 120)),
+        ("anna/b.fit", Ride(new LocalDate(2026, 5, 13), 300)),
+        ("anna/c.fit", Ride(new LocalDate(2026, 5, 20), 720)),
+        ("anna/d.fit", Ride(Shown, 0)),
+    ];
+
+    /// <summary>25 minutes at 100 W, of which the first after 5 minutes as hard as can be for so long.</summary>
+    private static byte[] Ride(LocalDate date, int seconds)
+    {
+        var ride = Some.Ride(date);
+        return FitEncoder.Encode(ride with
+        {
+            Samples = [.. Enumerable.Range(0, 1501).Select(second => new FitSample(
+                ride.Start + Duration.FromSeconds(second),
+                Power: second >= 300 && second < 300 + seconds ? 250 + (18_000 / seconds) : 100,
+                Distance: 8.0 * second))],
+        });
+    }
+
+    private static double Value(IReadOnlyList<ObservedAnchor> observed, AnchorKind kind) => Math.Round(observed.Single(one => one.Kind == kind).Value, 3);
+
+    private IReadOnlyList<ObservedAnchor> Observed(WorkingFolder? of = null) => (of ?? folder).Read((_, session) => session.ObservedAnchors.OfPerson("anna"));
+
+    private IReadOnlyList<StoredActivity> Rides() => folder.Read((_, session) => session.Activities.OfPerson("anna"));
+
+    private static bool HasPowerZones(StoredActivity activity) => activity.Values.TimesInZone.Any(zone => zone.Channel == Channel.Power);
+
+    private string Explained(LocalDate date) => folder.Read((workplace, session) => DayExplanation.Of(workplace.Configuration, session, "anna", date))!;
+}

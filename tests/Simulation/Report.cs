@@ -1,0 +1,133 @@
+using System.Globalization;
+using LoadWatch.Findings;
+using LoadWatch.Simulation.Counts;
+using LoadWatch.Simulation.Nights;
+using LoadWatch.Simulation.Worlds;
+
+namespace LoadWatch.Simulation;
+
+/// <summary>The tables, in the order in which <c>tests/README.md</c> keeps them.</summary>
+/// <param name="people">Of a squad; of runners and members as many.</param>
+/// <param name="days">Counted days.</param>
+public sealed class Report(int seed, int people, int days, TextWriter output)
+{
+    private static readonly Habits[] Groups = [Habits.Squad, Habits.Runners, Habits.Clinic];
+
+    private static readonly (string Name, Func<Habits, RuleLimits> Of)[] Sets = [("built in", Limits.BuiltIn), ("fitted", Limits.Fitted)];
+
+    public void Healthy()
+    {
+        Row("people", "limits", "false alerts a person and 100 days", "of them", "chatter", "rows a day", "95 % of days");
+        Row("---", "---", "---", "---", "---", "---", "---");
+        foreach (var (habits, set, limits) in Combinations())
+        {
+            var season = Season.Of(Maker(habits, limits).Healthy(people, days), habits.Sport);
+            var rows = Score.Rows(season).Order().ToList();
+            Row(
+                $"{people} {habits.Name}",
+                set,
+                Number(Score.FalsePerPersonAnd100Days(season)),
+                OfThem(season),
+                Count(Score.Chatter(season)),
+                Number(rows.Average()),
+                Count(rows[(int)(0.95 * (rows.Count - 1))]));
+        }
+    }
+
+    public void Episodes()
+    {
+        Row("people", "limits", "episode", "found", "share", "median days");
+        Row("---", "---", "---", "---", "---", "---");
+        foreach (var (habits, set, limits) in Combinations())
+        {
+            foreach (var found in Score.Episodes(Season.Of(Maker(habits, limits).WithEpisodes(people * 2, days), habits.Sport)))
+            {
+                Row(habits.Name, set, Words(found.Kind), $"{Count(found.Times)} of {Count(found.Episodes)}", $"{Count(100 * found.Times / found.Episodes)} %", found.MedianDays is { } median ? Count(median) : "-");
+            }
+        }
+    }
+
+    /// <summary>The same squad and days, looked at in another course of the service.</summary>
+    public void Courses()
+    {
+        var habits = Habits.Squad;
+        var world = Maker(habits, Limits.Fitted(habits)).Healthy(people, days);
+        var usual = Score.CountedRaises(Season.Of(world, habits.Sport));
+        Row("course of the service", "alerts", "other than in the usual course");
+        Row("---", "---", "---");
+        foreach (var (name, course) in new (string, Course)[]
+        {
+            ("the usual one", new Course()),
+            ("started anew every night, nothing computed before", new Course { FromNothing = true }),
+            ("two sweeps a night", new Course { TimesANight = 2 }),
+            ("all that came before comes in the night before", new Course { NightsBefore = 1 }),
+        })
+        {
+            var raises = Score.CountedRaises(Season.Of(world, habits.Sport, course));
+            Row(name, Count(raises.Count), Count(raises.Except(usual).Count() + usual.Except(raises).Count()));
+        }
+    }
+
+    public void Disturbances()
+    {
+        var habits = Habits.Squad;
+        Row("squad", "limits", "false alerts a person and 100 days", "of them", "chatter");
+        Row("---", "---", "---", "---", "---");
+        foreach (var (name, noise) in new (string, Noise)[]
+        {
+            ("as above", new Noise()),
+            ("every recording on its day", new Noise { Late = 0 }),
+            ("half of the recordings up to 6 days late", new Noise { Late = 0.5, LateDays = 6 }),
+            ("nothing missing", new Noise { Missing = 0 }),
+            ("30 % of the days missing", new Noise { Missing = 0.3 }),
+            ("no sensor fails", new Noise { Faults = 0 }),
+        })
+        {
+            Disturbed(name, "fitted", Limits.Fitted(habits), noise);
+        }
+
+        Disturbed("as above", "fitted, without deadband and delays", Limits.WithoutDeadband(Limits.Fitted(habits)), new Noise());
+        Disturbed("as above", "built in", Limits.BuiltIn(habits), new Noise());
+        Disturbed("as above", "built in, without deadband and delays", Limits.WithoutDeadband(Limits.BuiltIn(habits)), new Noise());
+    }
+
+    public void Clinic(int members)
+    {
+        var habits = Habits.Clinic;
+        var season = Season.Of(Maker(habits, Limits.Fitted(habits)).WithAway(members, 42, 0.2), habits.Sport, new Course { NightsBefore = 7 });
+        Row("clinic", "named a day, at most", "named or counted, mean", "at most");
+        Row("---", "---", "---", "---");
+        Row($"{Count(members)} members, 20 % away for three weeks and nobody told", Count(season.Briefs.Max(brief => brief.Flagged.Count)), Number(Score.Rows(season).Average()), Count(Score.Rows(season).Max()));
+    }
+
+    private void Disturbed(string name, string set, RuleLimits limits, Noise noise)
+    {
+        var season = Season.Of(new WorldMaker(seed, Habits.Squad, noise, limits).Healthy(people, days), Habits.Squad.Sport);
+        Row(name, set, Number(Score.FalsePerPersonAnd100Days(season)), OfThem(season), Count(Score.Chatter(season)));
+    }
+
+    private string OfThem(SeasonResult season) => string.Join(", ", Score.FalseAlerts(season)
+        .GroupBy(raise => raise.Key.Rule, StringComparer.Ordinal)
+        .OrderByDescending(rule => rule.Count())
+        .ThenBy(rule => rule.Key, StringComparer.Ordinal)
+        .Select(rule => $"{rule.Key} {Number(100.0 * rule.Count() / people / days)}"));
+
+    private static IEnumerable<(Habits Habits, string Set, RuleLimits Limits)> Combinations() =>
+        Groups.SelectMany(habits => Sets.Select(set => (habits, set.Name, set.Of(habits))));
+
+    private WorldMaker Maker(Habits habits, RuleLimits limits) => new(seed, habits, new Noise(), limits);
+
+    private static string Words(HappeningKind kind) => kind switch
+    {
+        HappeningKind.DoubleWeek => "a week twice as large",
+        HappeningKind.DoubleSession => "a session twice the longest of 30 days",
+        HappeningKind.NothingHeavy => "14 days without heavy or fast leg work",
+        _ => "a fade to 40 %",
+    };
+
+    private static string Number(double value) => value.ToString("0.00", CultureInfo.InvariantCulture);
+
+    private static string Count(int value) => value.ToString(CultureInfo.InvariantCulture);
+
+    private void Row(params string[] cells) => output.WriteLine($"| {string.Join(" | ", cells)} |");
+}
