@@ -100,7 +100,7 @@ public static class BasisParts
 
     private static string Line(Anchor anchor) => JsonSerializer.Serialize(new[]
     {
-        Date(anchor.Date), anchor.Kind.ToString(), anchor.Value.ToString("R", System.Globalization.CultureInfo.InvariantCulture), anchor.Source.ToString(), anchor.Exercise, anchor.Note, anchor.Machine, anchor.Sport,
+        Date(anchor.Date), anchor.Kind.ToString(), anchor.Value.ToString("R", System.Globalization.CultureInfo.InvariantCulture), anchor.Source.ToString(), anchor.Exercise, anchor.Note, anchor.Machine, anchor.Sport, Date(anchor.ShownOn),
     });
 
     private static IEnumerable<object> GroupNames(WorkingConfiguration configuration) =>

@@ -31,7 +31,7 @@ public sealed class BasisPartsTests
 
     [Fact]
     public void EveryPropertyOfAnAnchorIsInItsLine() =>
-        Assert.Equal(Sorted(["Person", "Date", "Kind", "Value", "Source", "Exercise", "Note", "Machine"]), Properties(typeof(Anchor)));
+        Assert.Equal(Sorted(["Person", "Date", "Kind", "Value", "Source", "Exercise", "Note", "Machine", "Sport", "ShownOn"]), Properties(typeof(Anchor)));
 
     [Fact]
     public void OfAnInboxNamePatternAndSalvageCount() =>
