@@ -22,32 +22,23 @@ public static class PersonDrawing
     private const float DigitWidth = 7;
     private const double HalfBar = 0.36;
 
-    /// <summary>One picture at a time: the drawing library's caches of fonts are shared, and its own.</summary>
-    private static readonly Lock Pen = new();
-
     private static readonly Color Ink = Colors.Black;
     private static readonly PixelPadding Frame = new(left: 0, right: 20, bottom: 20, top: 8);
 
     /// <summary>A scalable drawing to stand in a page: its ink is the page's own. The same values give the same text.</summary>
     public static string Svg(PersonPicture picture)
     {
-        lock (Pen)
-        {
-            using var plot = Draw(picture);
-            return InlineSvg.Of(plot.GetSvgXml(Width, Height));
-        }
+        using var plot = Draw(picture);
+        return InlineSvg.Of(plot.GetSvgXml(Width, Height));
     }
 
     /// <summary>Black on white, twice as many dots as <see cref="Width"/> and <see cref="Height"/> say. The same values give the same bytes.</summary>
     public static byte[] Png(PersonPicture picture)
     {
-        lock (Pen)
-        {
-            using var plot = Draw(picture);
-            plot.FigureBackground.Color = Colors.White;
-            plot.ScaleFactor = Dots;
-            return plot.GetImageBytes(Width * Dots, Height * Dots, ImageFormat.Png);
-        }
+        using var plot = Draw(picture);
+        plot.FigureBackground.Color = Colors.White;
+        plot.ScaleFactor = Dots;
+        return plot.GetImageBytes(Width * Dots, Height * Dots, ImageFormat.Png);
     }
 
     private static Plot Draw(PersonPicture picture)
@@ -146,16 +137,16 @@ public static class PersonDrawing
 
     private static void DrawLegs(Plot plot, PersonPicture picture, double height)
     {
-        Mark(plot, picture, day => day.HeavyLegs == true, height, MarkerShape.FilledDiamond, 7);
-        Mark(plot, picture, day => day.HeavyLegs is null, height, MarkerShape.OpenDiamond, 4);
+        Mark(plot, picture, day => day.HeavyLegs == true, height, MarkerShape.FilledDiamond, 7, new Diamond(filled: true));
+        Mark(plot, picture, day => day.HeavyLegs is null, height, MarkerShape.OpenDiamond, 4, new Diamond(filled: false));
     }
 
-    private static void Mark(Plot plot, PersonPicture picture, Func<BriefDay, bool> belongs, double height, MarkerShape shape, float size)
+    private static void Mark(Plot plot, PersonPicture picture, Func<BriefDay, bool> belongs, double height, MarkerShape shape, float size, IMarker? drawnBy = null)
     {
         var places = Enumerable.Range(0, picture.Days.Count).Where(place => belongs(picture.Days[place])).Select(place => (double)place).ToArray();
         if (places.Length > 0)
         {
-            plot.Add.Markers(places, [.. places.Select(_ => height)], shape, size, Ink);
+            plot.Add.Markers(places, [.. places.Select(_ => height)], shape, size, Ink).MarkerStyle.CustomRenderer = drawnBy;
         }
     }
 
