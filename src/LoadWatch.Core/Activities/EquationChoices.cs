@@ -16,6 +16,9 @@ public sealed record EquationChoices
     /// <summary>Tells the share of the maximum from repetitions to failure: load_chart, epley, brzycki, lander (from memory), mayhew or wathan.</summary>
     public OneRepetitionMaxEquation OneRepetitionMaxByRepetitions { get; init; } = OneRepetitionMaxEquation.LoadChart;
 
+    /// <summary>From which step cadence walking is moderate and vigorous: rounded (100 and 130 steps a minute) or by_age (the regressions behind them).</summary>
+    public StepCadenceLine StepCadence { get; init; } = StepCadenceLine.Rounded;
+
     /// <summary>Factor and exponent of Banister's training impulse for men, each 0 to 10. From secondary pages that agree.</summary>
     [Numbers(2, 0, 10)]
     public IReadOnlyList<double> BanisterMen { get; init; } = [0.64, 1.92];
