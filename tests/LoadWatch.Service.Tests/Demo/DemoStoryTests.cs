@@ -7,7 +7,7 @@ namespace LoadWatch.Service.Tests.Demo;
 
 public class DemoStoryTests
 {
-    /// <summary>Of the limit of 1.8, so that no seed comes near it by chance.</summary>
+    /// <summary>Of the limit of 2.2, so that no seed comes near it by chance.</summary>
     private const double RatioOfUsualPeople = 1.7;
 
     /// <summary>
