@@ -88,7 +88,7 @@ public sealed record WeekPlan(double LengthDeviation, IReadOnlyList<WeekSlot> Sl
 
     private static IEnumerable<WeekSlot> RowsOf(IsoDayOfWeek day)
     {
-        yield return new(day, Morning, day == Tuesday ? SessionKind.RowIntervals : SessionKind.Row, 43);
-        yield return new(day, Afternoon, SessionKind.Row, day == Tuesday ? 55 : 38);
+        yield return new(day, Morning, day == Tuesday ? SessionKind.RowIntervals : SessionKind.Row, 47);
+        yield return new(day, Afternoon, SessionKind.Row, day == Tuesday ? 60 : 42);
     }
 }
