@@ -82,7 +82,7 @@ public class SimulatedSeasonsTests
     [Fact]
     public void WithoutDeadbandAndDelaysChatterRises()
     {
-        int Chatter(RuleLimits limits) => Score.Chatter(Season.Of(new WorldMaker(Seed, Habits.Squad, new Noise(), limits).Healthy(30, 56), Habits.Squad.Sport));
+        int Chatter(RuleLimits limits) => Score.Chatter(Season.Of(new WorldMaker(Seed, Habits.Squad, new Noise(), limits).Healthy(30, 84), Habits.Squad.Sport));
 
         Assert.True(Chatter(Limits.WithoutDeadband(Limits.Before(Habits.Squad))) > Chatter(Limits.Before(Habits.Squad)));
         Assert.True(Chatter(Limits.WithoutDeadband(Limits.BuiltIn(Habits.Squad))) > Chatter(Limits.BuiltIn(Habits.Squad)));
