@@ -8,6 +8,8 @@ namespace LoadWatch.Service.Commands;
 /// <summary>Options that several commands share.</summary>
 public static class CommonOptions
 {
+    private static readonly LocalTimePattern HourAndMinute = LocalTimePattern.CreateWithInvariantCulture("HH:mm");
+
     public static Option<string> Config() => new("--config", "-c")
     {
         Description = "The configuration file.",
@@ -37,6 +39,14 @@ public static class CommonOptions
         CustomParser = ParseMoment,
     };
 
+    /// <summary>A time of day such as 18:30.</summary>
+    public static Option<LocalTime?> TimeOfDay(string name, string description) => new(name)
+    {
+        Description = description,
+        HelpName = "TIME",
+        CustomParser = ParseTimeOfDay,
+    };
+
     private static LocalDate? ParseDate(ArgumentResult argument)
     {
         var parsed = LocalDatePattern.Iso.Parse(argument.Tokens[0].Value);
@@ -46,6 +56,18 @@ public static class CommonOptions
         }
 
         argument.AddError($"\"{argument.Tokens[0].Value}\" is not a date such as 2026-03-31");
+        return null;
+    }
+
+    private static LocalTime? ParseTimeOfDay(ArgumentResult argument)
+    {
+        var parsed = HourAndMinute.Parse(argument.Tokens[0].Value);
+        if (parsed.Success)
+        {
+            return parsed.Value;
+        }
+
+        argument.AddError($"\"{argument.Tokens[0].Value}\" is not a time of day such as 18:30");
         return null;
     }
 

@@ -1,6 +1,5 @@
 using System.Globalization;
 using System.Text;
-using LoadWatch.Activities;
 using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.Notices;
@@ -8,9 +7,7 @@ using LoadWatch.People;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
 using LoadWatch.Service.Pipeline;
-using LoadWatch.Stimulus;
 using LoadWatch.Storage;
-using LoadWatch.Storage.Activities;
 using LoadWatch.Storage.Decisions;
 using NodaTime;
 
@@ -52,14 +49,14 @@ public static class DayExplanation
         var recorded = session.Activities.OfPerson(known.Id, day.Date, day.Date).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
         foreach (var activity in PersonTraining.Of(session, configuration, basis, known, day.Date, day.Date).Activities)
         {
-            AppendActivity(text, session, activity, recorded.GetValueOrDefault(activity.Key));
+            text.AppendLine();
+            SessionText.Append(text, session, activity, recorded.GetValueOrDefault(activity.Key));
         }
 
         foreach (var finding in session.Findings.OfPerson(known.Id, day.Date, day.Date))
         {
             text.AppendLine();
-            text.AppendLine(CultureInfo.InvariantCulture, $"finding {finding.Rule} ({Words.Of(finding.Severity)}): {OneLine.Of(finding.Text)}");
-            AlertExplanation.Append(text, finding.Evidence);
+            FindingExplanation.Append(text, finding);
         }
 
         return text.ToString();
@@ -103,48 +100,8 @@ public static class DayExplanation
         Line(text, "share of 28 days with known load", day.Coverage28);
     }
 
-    private static void AppendActivity(StringBuilder text, StoreSession session, JoinedActivity activity, StoredActivity? recorded)
-    {
-        text.AppendLine();
-        var start = recorded is { Session: { } told } ? Words.Start(told.Start.WithOffset(told.LocalOffset)) : "of no recording";
-        text.AppendLine(CultureInfo.InvariantCulture, $"session {start} {OneLine.Of(activity.Sport.ToString())}, by {OneLine.Of(string.Join(" and ", activity.Sources))}{(activity.AddsLoad ? "" : ", its load not added")}");
-        foreach (var quantity in activity.Quantities)
-        {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    {QuantityText.Of(quantity)}");
-        }
-
-        foreach (var stimulus in activity.Stimulus)
-        {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    {BodyRegions.Word(stimulus.Region)} from {stimulus.Channel}, grade {stimulus.Grade}: hard bouts {OfBand(stimulus.HardBouts)}, hard repetitions {OfBand(stimulus.HardRepetitions)}, seconds of the slow class {OfBand(stimulus.SlowSeconds)}, medium {OfBand(stimulus.MediumSeconds)}, largest {OfBand(stimulus.LargeSeconds)}");
-            foreach (var missing in stimulus.NotSeen)
-            {
-                text.AppendLine(CultureInfo.InvariantCulture, $"        not seen: {OneLine.Of(missing)}");
-            }
-        }
-
-        foreach (var remark in activity.Remarks)
-        {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    {OneLine.Of(remark)}");
-        }
-
-        if (recorded is not null)
-        {
-            CutText.Append(text, recorded.Values, recorded.Session.LocalOffset, "    ");
-        }
-
-        foreach (var contribution in recorded?.Merge.Contributions ?? [])
-        {
-            var (sha, part) = RecordingKey.Parse(contribution.Key);
-            text.AppendLine(CultureInfo.InvariantCulture, $"    recording {part} of {ContributionText.FileOf(session, sha)}: {ContributionText.Of(session, recorded!.Merge, contribution)}");
-        }
-    }
-
     private static void Line(StringBuilder text, string name, double? value) =>
         text.AppendLine(CultureInfo.InvariantCulture, $"    {name} = {Number(value)}");
 
     private static string Number(double? value) => value is { } known ? known.ToString("0.###", CultureInfo.InvariantCulture) : "unknown";
-
-    private static string OfBand(Band? band) => band is { } known
-        ? string.Create(CultureInfo.InvariantCulture, $"{known.Mid:0.#} ({known.Low:0.#} to {known.High:0.#})")
-        : "unknown";
 }

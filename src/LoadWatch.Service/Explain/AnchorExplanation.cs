@@ -1,0 +1,96 @@
+using System.Globalization;
+using System.Text;
+using LoadWatch.Anchors;
+using LoadWatch.Loads;
+using LoadWatch.People;
+using LoadWatch.Service.Configuration;
+using LoadWatch.Service.Export;
+using LoadWatch.Service.Pipeline;
+using LoadWatch.Storage;
+using NodaTime;
+
+namespace LoadWatch.Service.Explain;
+
+/// <summary>One reference value of a person: which one holds on a date, which others there are, what own sessions show, and what rests on it.</summary>
+public static class AnchorExplanation
+{
+    /// <summary>Null where the person or the kind is unknown.</summary>
+    /// <param name="date">Null: the last computed day, or without any the first date of all that the value may hold on.</param>
+    public static string? Of(WorkingConfiguration configuration, StoreSession session, string person, string kind, LocalDate? date)
+    {
+        if (!configuration.People.TryGetValue(person, out var known) || Kind(kind) is not { } info)
+        {
+            return null;
+        }
+
+        var basis = TableBasis.Of(configuration, session);
+        var book = basis.AnchorsOf(known);
+        var all = book.Of(known.Id).Where(anchor => anchor.Kind == info.Kind).ToList();
+        var on = date ?? LastDay.Of(session, known.Id)?.Date ?? all.Max(anchor => anchor.Date) ?? LocalDate.MinIsoValue;
+        var text = new StringBuilder();
+        text.AppendLine(CultureInfo.InvariantCulture, $"{OneLine.Of(known.Name)}, {info.Name} ({ReferenceWords.Of(info.Kind)}){(on == LocalDate.MinIsoValue ? "" : $" on {Words.Date(on)}")}");
+        AppendHolding(text, known, book, info.Kind, all, on);
+        AppendObserved(text, basis, known, info.Kind, on);
+        text.AppendLine(CultureInfo.InvariantCulture, $"    plausible from {info.Lowest.ToString("0.###", CultureInfo.InvariantCulture)} to {AnchorText.Value(info.Highest, info.Kind)}; a measured value goes before one from own sessions, that before one by an equation");
+        text.AppendLine(CultureInfo.InvariantCulture, $"    rests on it: {RestsOn(info.Kind)}");
+        return text.ToString();
+    }
+
+    /// <summary>The kind of a name as <c>anchors.csv</c> writes it, or null.</summary>
+    public static AnchorKindInfo? Kind(string name) => AnchorKinds.All.FirstOrDefault(kind => kind.Name == name);
+
+    private static void AppendHolding(StringBuilder text, Person person, AnchorBook book, AnchorKind kind, List<Anchor> all, LocalDate on)
+    {
+        foreach (var same in all.GroupBy(anchor => (anchor.Sport, anchor.Exercise, anchor.Machine)).OrderBy(same => $"{same.Key}", StringComparer.Ordinal))
+        {
+            var held = Held(book, same.First(), on);
+            foreach (var anchor in same.OrderByDescending(anchor => anchor == held).ThenByDescending(anchor => anchor.Date))
+            {
+                var use = anchor == held ? "holds" : anchor.Date > on ? "not yet" : "not used";
+                text.AppendLine(CultureInfo.InvariantCulture, $"    {use}: {AnchorText.Of(anchor.Source == AnchorSource.Observed ? anchor with { Note = null } : anchor)}{(AnchorText.Error(anchor) is { } error ? $"; taken to be within {error}" : "")}");
+            }
+        }
+
+        if (all.Exists(anchor => anchor.Date is null || anchor.Date <= on))
+        {
+            return;
+        }
+
+        var byAge = kind == AnchorKind.HeartRateMax && on > LocalDate.MinIsoValue ? AnchorText.ByAge(person, on, book.HeartRateMaxEquation) : null;
+        text.AppendLine(CultureInfo.InvariantCulture, $"    {(byAge is null ? "none holds" : $"none is stated; holds: {byAge}")}");
+    }
+
+    private static Anchor? Held(AnchorBook book, Anchor one, LocalDate on) => one.Sport is { } sport
+        ? book.On(on, one.Person, one.Kind, Recordings.Sport.Parse(sport))
+        : book.On(on, one.Person, one.Kind, one.Exercise, one.Machine);
+
+    private static void AppendObserved(StringBuilder text, TableBasis basis, Person person, AnchorKind kind, LocalDate on)
+    {
+        foreach (var one in basis.ObservedOf(person).Where(one => one.Kind == kind))
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"    from own sessions of the 12 months before {Words.Date(one.From)}: {AnchorText.Value(one.Value, kind)} within {AnchorText.Value(one.Error, kind)}, last shown on {Words.Date(one.ShownOn)}: {OneLine.Of(one.Basis)}");
+        }
+
+        foreach (var contradiction in AnchorContradiction.On(on, basis.ObservedOf(person).Where(one => one.Kind == kind), basis.StatedOf(person)))
+        {
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {OneLine.Of(contradiction.Words)}");
+        }
+    }
+
+    private static string RestsOn(AnchorKind kind) => kind switch
+    {
+        AnchorKind.HeartRateRest => "training impulse, zones of heart-rate reserve, stimulus by heart rate",
+        AnchorKind.HeartRateMax => "training impulse, loads by zones of the maximum, zones of heart-rate reserve, stimulus by heart rate",
+        AnchorKind.HeartRateVt1 => "load by ventilatory thresholds, zones of heart rate",
+        AnchorKind.HeartRateVt2 => "load by ventilatory thresholds, zones of heart rate, stimulus by heart rate",
+        AnchorKind.TrimpWeight or AnchorKind.TrimpExponent => "training impulse of own weighting",
+        AnchorKind.CriticalPower => "zones of power, stimulus by power",
+        AnchorKind.WPrime => "stimulus by power: what is left above critical power",
+        AnchorKind.PowerMax => "stimulus by power: hard bouts and the largest class",
+        AnchorKind.CriticalSpeed => "stimulus by speed on foot",
+        AnchorKind.DPrime => "stimulus by speed on foot: what is left above critical speed",
+        AnchorKind.SpeedMax => "stimulus by speed on foot: hard bouts and the largest class; shares of the best speed",
+        AnchorKind.OneRepetitionMax => "stimulus by sets",
+        _ => "nothing that is computed of sessions",
+    };
+}
