@@ -84,6 +84,9 @@ public static class AlertReview
             QuietReason.RuleOff => AlertSignal.TakeOut,
             _ when suppressed.Contains(alert.Key) => AlertSignal.Suppress,
             QuietReason.SuppressedByPlan => AlertSignal.Mute,
+
+            // Watched again, its rule counts anew: nobody has seen it end.
+            _ when alert.Watch == AlertWatch.SuppressedByDesign => AlertSignal.Mute,
             _ when alert.Judged < date && heldOn(alert.Key, alert.Raised) => AlertSignal.Return,
             QuietReason.LimitsChanged => AlertSignal.ChangeLimits,
             _ => AlertSignal.Correct,

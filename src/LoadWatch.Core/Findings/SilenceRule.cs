@@ -7,7 +7,7 @@ namespace LoadWatch.Findings;
 
 /// <summary>
 /// No recording for longer than the person's own rhythm lets expect; where a plan says which sessions should bring one, several of them in a row without. The
-/// only rule that unknown days raise (I-6); the next recording ends it. Absence mutes it.
+/// only rule that unknown days raise (I-6); the next recording ends it. Absence mutes it, and it counts anew from the end of one.
 /// </summary>
 public sealed class SilenceRule : IRule
 {
@@ -20,9 +20,9 @@ public sealed class SilenceRule : IRule
     public IEnumerable<Finding> Evaluate(RuleSubject subject)
     {
         var (person, days, limits) = subject;
-        var before = subject.Memory.Before<Silence>(Name) ?? new Silence(0, Rhythm: null, Missed: null, LastThere: null);
+        var before = subject.Memory.Before<Silence>(Name) ?? new Silence(0, Since: null, Rhythm: null, Missed: null, LastThere: null);
         var recorded = days.Take(subject.First).Where(day => day.State == DayState.Recorded).Select(day => day.Date).ToList();
-        var (silent, rhythm, there) = (before.Days, before.Rhythm, before.LastThere ?? LastThereBefore(subject));
+        var (silent, since, rhythm, there) = (before.Days, before.Since, before.Rhythm, before.LastThere ?? LastThereBefore(subject));
         var planned = new PlannedSessions(limits.Silence, before.Missed);
         foreach (var day in days.Take(subject.First))
         {
@@ -33,14 +33,15 @@ public sealed class SilenceRule : IRule
         {
             planned.Add(day);
             there = subject.Plan.Attendance.GetValueOrDefault(day.Date) ? day.Date : there;
-            silent = day.State == DayState.Recorded ? 0 : day.Plan.Absence is null && day.Plan.RestStatedBy is null ? silent + 1 : silent;
+            silent = day.State == DayState.Recorded || day.Plan.Absence is not null ? 0 : day.Plan.RestStatedBy is null ? silent + 1 : silent;
             if (day.State == DayState.Recorded)
             {
                 recorded.Add(day.Date);
                 rhythm = RecordingRhythm.Of(recorded, limits.Silence);
             }
 
-            subject.Memory.Keep(day.Date, Name, new Silence(silent, rhythm, planned.State, there));
+            since = silent > rhythm?.LimitDays ? since ?? day.Date : null;
+            subject.Memory.Keep(day.Date, Name, new Silence(silent, since, rhythm, planned.State, there));
             if (day.State == DayState.Recorded || day.Plan.Absence is not null)
             {
                 continue;
@@ -53,20 +54,20 @@ public sealed class SilenceRule : IRule
                     yield return FindPlanned(person, day, planned, Attended(there, day.Date), limits.Silence);
                 }
             }
-            else if (rhythm is not null && silent > rhythm.LimitDays)
+            else if (rhythm is not null && since is { } first)
             {
-                yield return Find(person, day, silent, Attended(there, day.Date), rhythm, limits.Silence);
+                yield return Find(person, day, first, silent, Attended(there, day.Date), rhythm, limits.Silence);
             }
         }
     }
 
-    private Finding Find(Person person, Day day, int silent, string attended, RecordingRhythm rhythm, SilenceLimits limits) => new(
+    private Finding Find(Person person, Day day, LocalDate since, int silent, string attended, RecordingRhythm rhythm, SilenceLimits limits) => new(
         person.Id,
         day.Date,
         Name,
         Region: null,
         limits.Severity.Severity(),
-        day.Date.PlusDays(rhythm.LimitDays + 1 - silent),
+        since,
         silent,
         rhythm.LimitDays,
         "days",
@@ -108,7 +109,7 @@ public sealed class SilenceRule : IRule
     }
 
     private static Evidence Basis(int silent, RecordingRhythm rhythm, SilenceLimits limits) => new(
-        "days since the last recorded day without those of absence and of stated rest, against a quantile of the gaps between recorded days before it (nearest rank upward) + extra days, "
+        "days since the last recorded day or absence without those of stated rest, against a quantile of the gaps between recorded days before it (nearest rank upward) + extra days, "
             + "at most the ceiling",
         "a choice",
         [
@@ -123,6 +124,6 @@ public sealed class SilenceRule : IRule
             new("gaps_wanted", limits.GapsWanted, "count"),
         ]);
 
-    /// <summary>What the next date needs: days without a recording, the rhythm as it was on the last one, and who was there last without one.</summary>
-    private sealed record Silence(int Days, RecordingRhythm? Rhythm, MissedSessions? Missed, LocalDate? LastThere);
+    /// <summary>What the next date needs: days without a recording, since when they are too many, the rhythm as it was on the last one, who was there last without one.</summary>
+    private sealed record Silence(int Days, LocalDate? Since, RecordingRhythm? Rhythm, MissedSessions? Missed, LocalDate? LastThere);
 }

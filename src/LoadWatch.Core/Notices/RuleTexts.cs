@@ -68,6 +68,7 @@ public static class RuleTexts
 
     private static string While(string rule, PlannedState? state) => state switch
     {
+        null => "up to now",
         PlannedState.LightWeek or PlannedState.OffSeason => "in light weeks and the off-season",
         _ => PlanMutes.Of(rule).Contains(PlannedState.Returning) ? "while away or returning" : "while away",
     };

@@ -266,7 +266,17 @@ public class AlertReviewTests
         var again = AlertReview.Review("anna", On(8), still.Alerts, _ => 4, [Find(Legs, 8, severity: Severity.Warning)], (_, _) => true, new Watching(new RuleLimits(), DayPlan.None));
         Assert.Equal([(5, AlertChangeReason.WatchedAgain), (6, AlertChangeReason.SeverityRose)], again.Changes.Select(change => (change.Sequence, change.Reason)));
         Assert.True(again.Alerts[0].IsTold);
-        Assert.Equal(AlertState.Returned, AlertReview.Review("anna", On(8), still.Alerts, _ => 4, [], (_, _) => true, Watching.Everything).Alerts[0].State);
+    }
+
+    /// <summary>The run of a rule begins anew when it is watched again, so that its finding may be missing for some dates: that is no return.</summary>
+    [Fact]
+    public void WhatStoodUntoldAndIsNotThereWhenWatchedAgainWasSeenToEndByNobody()
+    {
+        var untold = Alert(AlertState.Unacknowledged) with { Watch = AlertWatch.SuppressedByDesign };
+
+        var over = AlertReview.Review("anna", On(8), [untold], _ => 4, [], (_, _) => true, Watching.Everything);
+
+        AssertChange(over, 5, AlertState.Unacknowledged, AlertState.Normal, AlertChangeReason.SuppressedByPlan);
     }
 
     [Fact]

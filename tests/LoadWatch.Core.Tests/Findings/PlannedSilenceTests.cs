@@ -48,6 +48,20 @@ public class PlannedSilenceTests
         Assert.Empty(Rule.Of([.. resting.Take(38), days[38], days[39]]));
     }
 
+    /// <summary>Recorded daily, so at most three days without; eight silent days, ten away, then silent again.</summary>
+    [Fact]
+    public void FromTheEndOfAnAbsenceItCountsAnew()
+    {
+        var days = Enumerable.Range(0, 45)
+            .Select(day => Of(day, recorded: day < 20, expected: false))
+            .Select(day => day.Date >= On(28) && day.Date < On(38) ? day with { Plan = DayPlan.None with { Absence = AbsenceWord.Ill } } : day);
+
+        var told = Rule.Of([.. days]);
+
+        Assert.Equal([23, 24, 25, 26, 27, 41, 42, 43, 44], told.Select(finding => NodaTime.Period.DaysBetween(On(0), finding.Date)));
+        Assert.Equal(On(41), told[^1].Since);
+    }
+
     [Fact]
     public void WhoWasThereAndLoggedNothingIsSaidToHaveBeenThere()
     {

@@ -245,7 +245,7 @@ public sealed class BriefBuilderTests
     {
         var held = new Finding("a", Today, "load_ratio", null, Severity.Suppressed, Today, 1.95, 1.8, "ratio", "Load is high.", new Evidence("a / b", "a choice", []));
         var brief = Build(Subject("a", "Ann") with { Suppressed = [held] });
-        Assert.Equal("load well above the usual: not watched while away or returning", brief.Groups[0].Rows[0].Remark);
+        Assert.Equal("load well above the usual: not watched up to now", brief.Groups[0].Rows[0].Remark);
         Assert.Empty(brief.Flagged);
     }
 

@@ -14,7 +14,7 @@ internal static class EffortChecks
         "Bushman 2020, Metabolic calculations in action: part 2, ACSM's Health Fit J 24(4):5-8, box 1 (American College of Sports Medicine, Guidelines, table 6.3)",
         Reading.Read);
 
-    private static readonly Source Slides = new("lecture slides on the equations of the American College of Sports Medicine, worked examples", Reading.Quoted);
+    private static readonly Source Slides = new("teaching slides (author not noted) on the equations of the American College of Sports Medicine, worked examples", Reading.Quoted);
 
     private static readonly Source Treadmill = new("Armstrong, Metabolic equations: treadmill energy expenditure (course page), worked example", Reading.Quoted);
 

@@ -40,6 +40,19 @@ public class GradientsTests
         Assert.All(gradients, gradient => Assert.Equal(0, gradient, 1e-9));
     }
 
+    /// <summary>What is left of sums that came and went is rounding, and no height: over the gap the way reads as level.</summary>
+    [Fact]
+    public void AGapOfTheHeightAfterUnevenGroundIsLevelAndNeverUnreadable()
+    {
+        var speed = Steps(3.3, 600);
+        var heights = speed.Where((_, second) => second is < 300 or > 390).Select((one, at) => one with { Value = 503.7 + (7.1 * Math.Sin(at * 0.37)) + (0.1 * at) }).ToArray();
+        var gradients = new double[speed.Length];
+        Gradients.Along(new UsableChannel(Channel.Speed, speed, 1), new UsableChannel(Channel.Altitude, heights, 1), gradients);
+
+        Assert.All(gradients, gradient => Assert.True(double.IsFinite(gradient)));
+        Assert.All(gradients[340..350], gradient => Assert.Equal(0, gradient));
+    }
+
     private static double[] Along(UsableSample[] speed, Func<int, double> height)
     {
         var heights = speed.Select((one, second) => one with { Value = 500 + height(second) }).ToArray();
