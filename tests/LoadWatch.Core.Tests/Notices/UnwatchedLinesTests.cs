@@ -7,7 +7,7 @@ using LoadWatch.Stimulus;
 using NodaTime;
 using static LoadWatch.Tests.MorningExamples;
 
-namespace LoadWatch.Core.Tests.Notices;
+namespace LoadWatch.Tests.Notices;
 
 /// <summary>What no rule looks at stands below the group's table, a line each; whoever is watched as usual adds nothing.</summary>
 public sealed class UnwatchedLinesTests
