@@ -63,7 +63,7 @@ public class SimulatedSeasonsTests
     [Fact]
     public void LateFilesRaiseNoMore()
     {
-        var late = new WorldMaker(Seed, Habits.Squad, new Noise { Late = 0.3, LateDays = 3 }, Limits.Fitted(Habits.Squad)).Healthy(30, 56);
+        var late = new WorldMaker(Seed, Habits.Squad, new Noise { Late = 0.3, LateDays = 3 }, Limits.BuiltIn(Habits.Squad)).Healthy(30, 56);
         var raised = Score.FalseAlerts(Season.Of(late, Habits.Squad.Sport)).Count(raise => raise.Key.Rule != "silence");
 
         Assert.InRange(100.0 * raised / 30 / 56, 0, 1);
@@ -82,10 +82,11 @@ public class SimulatedSeasonsTests
     [Fact]
     public void WithoutDeadbandAndDelaysChatterRises()
     {
-        int Chatter(RuleLimits limits) => Score.Chatter(Season.Of(new WorldMaker(Seed, Habits.Squad, new Noise(), limits).Healthy(30, 56), Habits.Squad.Sport));
+        int Chatter(RuleLimits limits) => Score.Chatter(Season.Of(new WorldMaker(Seed, Habits.Squad, new Noise(), limits).Healthy(30, 84), Habits.Squad.Sport));
 
+        Assert.True(Chatter(Limits.WithoutDeadband(Limits.Before(Habits.Squad))) > Chatter(Limits.Before(Habits.Squad)));
         Assert.True(Chatter(Limits.WithoutDeadband(Limits.BuiltIn(Habits.Squad))) > Chatter(Limits.BuiltIn(Habits.Squad)));
     }
 
-    private static WorldMaker Maker(Habits habits) => new(Seed, habits, new Noise(), Limits.Fitted(habits));
+    private static WorldMaker Maker(Habits habits) => new(Seed, habits, new Noise(), Limits.BuiltIn(habits));
 }

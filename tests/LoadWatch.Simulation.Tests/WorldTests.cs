@@ -5,12 +5,12 @@ namespace LoadWatch.Simulation.Tests;
 /// <summary>The generator keeps what it promises; else its counts would mean nothing.</summary>
 public class WorldTests
 {
-    private static readonly World Squad = new WorldMaker(7, Habits.Squad, new Noise(), Limits.Fitted(Habits.Squad)).Healthy(60, 100);
+    private static readonly World Squad = new WorldMaker(7, Habits.Squad, new Noise(), Limits.BuiltIn(Habits.Squad)).Healthy(60, 100);
 
     [Fact]
     public void TheSameSeedGivesTheSameWorldAndAnotherAnother()
     {
-        World Of(int seed) => new WorldMaker(seed, Habits.Clinic, new Noise(), Limits.Fitted(Habits.Clinic)).Healthy(3, 30);
+        World Of(int seed) => new WorldMaker(seed, Habits.Clinic, new Noise(), Limits.BuiltIn(Habits.Clinic)).Healthy(3, 30);
 
         Assert.Equal(Of(1).People.SelectMany(person => person.Sessions), Of(1).People.SelectMany(person => person.Sessions));
         Assert.NotEqual(Of(1).People.SelectMany(person => person.Sessions), Of(2).People.SelectMany(person => person.Sessions));
@@ -59,7 +59,7 @@ public class WorldTests
     [Fact]
     public void EpisodesAreAsLargeAsTheirNames()
     {
-        var world = new WorldMaker(7, Habits.Squad, new Noise { LoadDeviation = 0, DistanceDeviation = 0 }, Limits.Fitted(Habits.Squad)).WithEpisodes(40, 84);
+        var world = new WorldMaker(7, Habits.Squad, new Noise { LoadDeviation = 0, DistanceDeviation = 0 }, Limits.BuiltIn(Habits.Squad)).WithEpisodes(40, 84);
         foreach (var person in world.People)
         {
             var episode = Assert.Single(person.Happenings, one => one.IsEpisode);

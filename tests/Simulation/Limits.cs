@@ -6,24 +6,23 @@ namespace LoadWatch.Simulation;
 /// <summary>Limits under which the worlds are looked at.</summary>
 public static class Limits
 {
-    /// <summary>As built in.</summary>
-    public static RuleLimits BuiltIn(Habits habits) => OfClinic(new RuleLimits(), habits);
-
     /// <summary>Fitted to the healthy and to the episodes: as few false alerts as leave nine of ten episodes found.</summary>
-    public static RuleLimits Fitted(Habits habits)
+    public static RuleLimits BuiltIn(Habits habits) => habits == Habits.Clinic ? RuleLimits.OfClinic() : new RuleLimits();
+
+    /// <summary>The built-in ones before that: every number a choice made without it.</summary>
+    public static RuleLimits Before(Habits habits)
     {
         var limits = new RuleLimits();
-        limits = limits with
+        return OfClinicBefore(habits, limits with
         {
-            LoadRatio = limits.LoadRatio with { Raise = 2.2, Return = 1.8, OnDays = 2 },
-            WeeklyJump = limits.WeeklyJump with { Raise = 0.3, Return = 0.15, UsualFactor = 1.5 },
-            SessionSpike = limits.SessionSpike with { LoadNotice = 0.6, RunNotice = 0.3, RunWarning = 0.6, SessionsWanted = 5 },
-            FallingLoad = limits.FallingLoad with { Notice = 0.55, OnDays = 3 },
-            StimulusLow = limits.StimulusLow with { UsualShare = 0.35, OlderFloorDays = 2 },
-            Silence = limits.Silence with { PlannedMissed = 3, ExtraDays = 3 },
-            NotUsable = limits.NotUsable with { Sessions = 3 },
-        };
-        return OfClinic(habits == Habits.Clinic ? limits with { LoadRatio = limits.LoadRatio with { Enabled = false }, WeeklyJump = limits.WeeklyJump with { Enabled = false } } : limits, habits);
+            LoadRatio = limits.LoadRatio with { Raise = 1.8, Return = 1.6, OnDays = 1 },
+            WeeklyJump = limits.WeeklyJump with { Raise = 0.4, Return = 0.25, UsualFactor = 1.2 },
+            SessionSpike = limits.SessionSpike with { LoadNotice = 0.4, RunNotice = 0.1, RunWarning = 0.3, SessionsWanted = 8 },
+            FallingLoad = limits.FallingLoad with { Notice = 0.6, OnDays = 1 },
+            StimulusLow = limits.StimulusLow with { UsualShare = 0.5, OlderFloorDays = 3 },
+            Silence = limits.Silence with { PlannedMissed = 2, ExtraDays = 2 },
+            NotUsable = limits.NotUsable with { Sessions = 2 },
+        });
     }
 
     /// <summary>The same limits without deadband and delays: over on the first date below the limit, raised and over at once.</summary>
@@ -38,8 +37,8 @@ public static class Limits
         SessionSpike = limits.SessionSpike with { HoldDays = 0 },
     };
 
-    /// <summary>Even weeks and days in a row mean little where people come twice a week.</summary>
-    private static RuleLimits OfClinic(RuleLimits limits, Habits habits) => habits == Habits.Clinic
+    /// <summary>Only what says that weeks are even and days in a row are hard was off there.</summary>
+    private static RuleLimits OfClinicBefore(Habits habits, RuleLimits limits) => habits == Habits.Clinic
         ? limits with { Monotony = limits.Monotony with { Enabled = false }, HardDays = limits.HardDays with { Enabled = false } }
         : limits;
 }

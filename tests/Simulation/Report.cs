@@ -13,7 +13,7 @@ public sealed class Report(int seed, int people, int days, TextWriter output)
 {
     private static readonly Habits[] Groups = [Habits.Squad, Habits.Runners, Habits.Clinic];
 
-    private static readonly (string Name, Func<Habits, RuleLimits> Of)[] Sets = [("built in", Limits.BuiltIn), ("fitted", Limits.Fitted)];
+    private static readonly (string Name, Func<Habits, RuleLimits> Of)[] Sets = [("before", Limits.Before), ("built in", Limits.BuiltIn)];
 
     public void Healthy()
     {
@@ -51,7 +51,7 @@ public sealed class Report(int seed, int people, int days, TextWriter output)
     public void Courses()
     {
         var habits = Habits.Squad;
-        var world = Maker(habits, Limits.Fitted(habits)).Healthy(people, days);
+        var world = Maker(habits, Limits.BuiltIn(habits)).Healthy(people, days);
         var usual = Score.CountedRaises(Season.Of(world, habits.Sport));
         Row("course of the service", "alerts", "other than in the usual course");
         Row("---", "---", "---");
@@ -83,18 +83,18 @@ public sealed class Report(int seed, int people, int days, TextWriter output)
             ("no sensor fails", new Noise { Faults = 0 }),
         })
         {
-            Disturbed(name, "fitted", Limits.Fitted(habits), noise);
+            Disturbed(name, "built in", Limits.BuiltIn(habits), noise);
         }
 
-        Disturbed("as above", "fitted, without deadband and delays", Limits.WithoutDeadband(Limits.Fitted(habits)), new Noise());
-        Disturbed("as above", "built in", Limits.BuiltIn(habits), new Noise());
         Disturbed("as above", "built in, without deadband and delays", Limits.WithoutDeadband(Limits.BuiltIn(habits)), new Noise());
+        Disturbed("as above", "before", Limits.Before(habits), new Noise());
+        Disturbed("as above", "before, without deadband and delays", Limits.WithoutDeadband(Limits.Before(habits)), new Noise());
     }
 
     public void Clinic(int members)
     {
         var habits = Habits.Clinic;
-        var season = Season.Of(Maker(habits, Limits.Fitted(habits)).WithAway(members, 42, 0.2), habits.Sport, new Course { NightsBefore = 7 });
+        var season = Season.Of(Maker(habits, Limits.BuiltIn(habits)).WithAway(members, 42, 0.2), habits.Sport, new Course { NightsBefore = 7 });
         Row("clinic", "named a day, at most", "named or counted, mean", "at most");
         Row("---", "---", "---", "---");
         Row($"{Count(members)} members, 20 % away for three weeks and nobody told", Count(season.Briefs.Max(brief => brief.Flagged.Count)), Number(Score.Rows(season).Average()), Count(Score.Rows(season).Max()));

@@ -1,4 +1,5 @@
 using System.ComponentModel.DataAnnotations;
+using LoadWatch.Days;
 using LoadWatch.Loads;
 using LoadWatch.People;
 
@@ -15,6 +16,9 @@ public sealed record EquationChoices
 
     /// <summary>Tells the share of the maximum from repetitions to failure: load_chart, epley, brzycki, lander (from memory), mayhew or wathan.</summary>
     public OneRepetitionMaxEquation OneRepetitionMaxByRepetitions { get; init; } = OneRepetitionMaxEquation.LoadChart;
+
+    /// <summary>From which step cadence walking is moderate and vigorous: rounded (100 and 130 steps a minute) or by_age (the regressions behind them).</summary>
+    public StepCadenceLine StepCadence { get; init; } = StepCadenceLine.Rounded;
 
     /// <summary>Factor and exponent of Banister's training impulse for men, each 0 to 10. From secondary pages that agree.</summary>
     [Numbers(2, 0, 10)]
@@ -40,7 +44,15 @@ public sealed record EquationChoices
     [Numbers(5, 0, 100)]
     public IReadOnlyList<double> StagnoWeights { get; init; } = [1.25, 1.71, 2.54, 3.61, 5.16];
 
-    /// <summary>How many times its load a repetition counts that was declared fast: units join a ballistic contraction at a third of the force (from memory). 1 to 5.</summary>
+    /// <summary>The standard deviation that monotony divides by: sample (over n - 1) or population (over n). A choice: the source that could be read does not say.</summary>
+    public LoadDeviation MonotonyDeviation { get; init; } = LoadDeviation.Sample;
+
+    /// <summary>How many times its load a repetition counts that was fast: units join a ballistic contraction at a third of the force (from memory). 1 to 5.</summary>
     [Range(1.0, 5.0)]
     public double FastLoadFactor { get; init; } = 3;
+
+    /// <summary>Mean speed of the lifting phase, m/s, from which a set with a measured speed is fast; a slower one is not, whatever was declared. A choice: about what
+    /// 60 % of the maximum, the heaviest of power training, reaches at most (0.8 m/s in the bench press, from memory). 0.2 to 3.</summary>
+    [Range(0.2, 3.0)]
+    public double FastBarSpeed { get; init; } = 0.8;
 }

@@ -10,7 +10,7 @@ public static class HistogramRenewal
 {
     /// <summary>
     /// The values with all that their histograms tell computed anew, equal to what <see cref="ActivityComputation"/> gives but for the stimulus,
-    /// and the cut above the maximal heart rate, which need the samples. Where the usable share wanted, the formulas (<see cref="ActivityComputation.Version"/>) or the dates on which the
+    /// the minutes of effort, and the cut above the maximal heart rate, which need the samples. Where the usable share wanted, the formulas (<see cref="ActivityComputation.Version"/>) or the dates on which the
     /// person's heart rate is valid changed, only decoding helps.
     /// </summary>
     /// <param name="values">As computed from one recording, with every histogram that was stored of it.</param>

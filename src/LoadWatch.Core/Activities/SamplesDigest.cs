@@ -55,6 +55,7 @@ public static class SamplesDigest
         digest = set.Pin is { } pin ? digest.Add(4L).Add(pin) : digest;
         digest = set.IsHold ? digest.Add(5L) : digest;
         digest = set.IsFast ? digest.Add(6L) : digest;
-        return set.ConcentricSeconds is { } seconds ? digest.Add(7L).Add(seconds) : digest;
+        digest = set.ConcentricSeconds is { } seconds ? digest.Add(7L).Add(seconds) : digest;
+        return set.BarSpeedMetresPerSecond is { } speed ? digest.Add(8L).Add(speed) : digest;
     }
 }

@@ -24,6 +24,7 @@ internal static class SetRows
         Pin = row.Pin,
         IsHold = row.IsHold,
         IsFast = row.IsFast,
+        BarSpeedMetresPerSecond = row.BarSpeedMetresPerSecond,
     };
 
     /// <summary>The word under which the table of exercises is asked; null where none is written.</summary>

@@ -17,7 +17,22 @@ internal sealed record CalendarDate(
     DayPlan Plan,
     IReadOnlyDictionary<string, LocalDate> Sources)
 {
-    public double? Load => DayLoad.Of(State, [.. Activities.Where(activity => activity.AddsLoad).Select(activity => activity.Load)]);
+    public double? Load => DayLoad.Of(State, Adding(activity => activity.Load));
 
-    public double? LoadError => Load is null ? null : DayLoad.ErrorOf(Activities.Where(activity => activity.AddsLoad).Select(activity => activity.Session?.LoadError));
+    public double? LoadError => Load is null ? null : DayLoad.ErrorOf(Adding(activity => activity.Session?.LoadError));
+
+    /// <summary>Of the activities that add to the date, in key order.</summary>
+    private List<double?> Adding(Func<ActivityOnDay, double?> value)
+    {
+        var values = new List<double?>(Activities.Count);
+        foreach (var activity in Activities)
+        {
+            if (activity.AddsLoad)
+            {
+                values.Add(value(activity));
+            }
+        }
+
+        return values;
+    }
 }

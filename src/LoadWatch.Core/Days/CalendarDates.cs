@@ -9,6 +9,9 @@ internal static class CalendarDates
     /// <summary>A recording speaks for its source's empty days up to this many days before it, back to the source's last recording. Days.</summary>
     private const int SettledDaysBack = LoadCalendar.SettledDaysBack;
 
+    /// <summary>Of every date without one; nothing is ever added to it.</summary>
+    private static readonly List<ActivityOnDay> NoActivity = [];
+
     /// <summary>The dates behind <paramref name="last"/>, else from the first activity on, up to <paramref name="to"/>. Later activities only settle them.</summary>
     public static IEnumerable<CalendarDate> Lay(Day? last, IReadOnlyList<ActivityOnDay> activities, LocalDate to, PersonPlan plan)
     {
@@ -19,14 +22,12 @@ internal static class CalendarDates
     private static List<ActivityOnDay>[] ByDate(LocalDate first, LocalDate to, IReadOnlyList<ActivityOnDay> activities)
     {
         var dates = new List<ActivityOnDay>[Period.DaysBetween(first, to) + 1 + SettledDaysBack];
-        for (var index = 0; index < dates.Length; index++)
-        {
-            dates[index] = [];
-        }
-
+        Array.Fill(dates, NoActivity);
         foreach (var activity in activities.Where(activity => activity.Date >= first && activity.Date <= to.PlusDays(SettledDaysBack)).OrderBy(activity => activity.Key, StringComparer.Ordinal))
         {
-            dates[Period.DaysBetween(first, activity.Date)].Add(activity);
+            ref var date = ref dates[Period.DaysBetween(first, activity.Date)];
+            date = ReferenceEquals(date, NoActivity) ? [] : date;
+            date.Add(activity);
         }
 
         return dates;
@@ -63,10 +64,14 @@ internal static class CalendarDates
             return sources;
         }
 
-        var seen = new SortedDictionary<string, LocalDate>(sources.ToDictionary(), StringComparer.Ordinal);
-        foreach (var source in activities.SelectMany(activity => activity.Sources))
+        // From a sorted one it is copied as it is.
+        var seen = new SortedDictionary<string, LocalDate>(sources as SortedDictionary<string, LocalDate> ?? (IDictionary<string, LocalDate>)sources.ToDictionary(), StringComparer.Ordinal);
+        foreach (var activity in activities)
         {
-            seen[source] = date;
+            foreach (var source in activity.Sources)
+            {
+                seen[source] = date;
+            }
         }
 
         return seen;

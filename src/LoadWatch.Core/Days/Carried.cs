@@ -1,3 +1,4 @@
+using System.Collections.ObjectModel;
 using System.Text.Json;
 using System.Text.Json.Serialization;
 using LoadWatch.Loads;
@@ -26,16 +27,16 @@ public sealed record Carried
     public static Carried Nothing { get; } = new();
 
     /// <summary>The last recorded date of every source seen.</summary>
-    public IReadOnlyDictionary<string, LocalDate> Sources { get; init; } = new Dictionary<string, LocalDate>();
+    public IReadOnlyDictionary<string, LocalDate> Sources { get; init; } = ReadOnlyDictionary<string, LocalDate>.Empty;
 
     /// <summary>The first date with a known value, of quantities other than the group's load that rules watch.</summary>
-    public IReadOnlyDictionary<string, LocalDate> FirstCovered { get; init; } = new Dictionary<string, LocalDate>();
+    public IReadOnlyDictionary<string, LocalDate> FirstCovered { get; init; } = ReadOnlyDictionary<string, LocalDate>.Empty;
 
     /// <summary>Null where the person's heart rate is always valid: then nothing looks so far back.</summary>
     public CarriedLoads? Loads { get; init; }
 
     /// <summary>What rules keep, by a key of their own: as they made it, or, read back, as text that they read.</summary>
-    public IReadOnlyDictionary<string, object> Runs { get; init; } = new Dictionary<string, object>();
+    public IReadOnlyDictionary<string, object> Runs { get; init; } = ReadOnlyDictionary<string, object>.Empty;
 
     /// <summary>The same of the rules of load by the reference values before a change that lies in the window (I-15); null where none does.</summary>
     public IReadOnlyDictionary<string, object>? FormerRuns { get; init; }

@@ -1,3 +1,4 @@
+using System.Collections.ObjectModel;
 using System.Text.Json.Serialization;
 using LoadWatch.Plans;
 using LoadWatch.Stimulus;
@@ -99,7 +100,7 @@ public sealed record Day
     /// <summary>What plan and answers say of the date.</summary>
     public DayPlan Plan { get; init; } = DayPlan.None;
 
-    public IReadOnlyDictionary<BodyRegion, RegionDay> Regions { get; init; } = new Dictionary<BodyRegion, RegionDay>();
+    public IReadOnlyDictionary<BodyRegion, RegionDay> Regions { get; init; } = ReadOnlyDictionary<BodyRegion, RegionDay>.Empty;
 
     /// <summary>What later dates need of its sessions, in key order. Days read for a brief or an export hold none.</summary>
     public IReadOnlyList<DaySession> Sessions { get; init; } = [];

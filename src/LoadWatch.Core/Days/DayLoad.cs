@@ -8,7 +8,7 @@ internal static class DayLoad
     public static double? Of(DayState state, IReadOnlyList<double?> adding) => state switch
     {
         DayState.Rest => 0,
-        DayState.Recorded when adding.Count > 0 && adding.All(load => load.HasValue) => Significant.Round(adding.Sum(load => load!.Value)),
+        DayState.Recorded when adding.Count > 0 => Significant.Round(Sum(adding)),
         _ => null,
     };
 
@@ -23,5 +23,16 @@ internal static class DayLoad
         }
 
         return squares is { } sum && double.IsFinite(sum) ? Significant.Round(Math.Sqrt(sum)) : null;
+    }
+
+    private static double? Sum(IReadOnlyList<double?> adding)
+    {
+        double? sum = 0;
+        for (var index = 0; index < adding.Count; index++)
+        {
+            sum += adding[index];
+        }
+
+        return sum;
     }
 }

@@ -15,7 +15,21 @@ internal static class HeavyOrFast
     };
 
     /// <summary>Whether some activity of the date had a figure that could see hard work of the region.</summary>
-    public static bool IsSeen(CalendarDate date, BodyRegion region) => date.Activities.Any(activity => activity.Stimulus.Any(stimulus => stimulus.Region == region && stimulus.SeesHardWork));
+    public static bool IsSeen(CalendarDate date, BodyRegion region)
+    {
+        foreach (var activity in date.Activities)
+        {
+            foreach (var stimulus in activity.Stimulus)
+            {
+                if (stimulus.Region == region && stimulus.SeesHardWork)
+                {
+                    return true;
+                }
+            }
+        }
+
+        return false;
+    }
 
     /// <summary>An activity without an entry for the region is no work of it.</summary>
     private static bool? JudgeWork(CalendarDate date, BodyRegion region)

@@ -29,10 +29,16 @@ public static class LoadCalendar
     /// <summary>The dates behind those that there are, up to <paramref name="to"/>: the same as if all were laid out at once.</summary>
     /// <param name="before">Unbroken days up to the one before: all of them, or the last <see cref="LookBackDays"/>; none: it begins with the first activity.</param>
     /// <param name="activities">Of the dates to lay out; those of the 7 days behind <paramref name="to"/> settle them.</param>
+    /// <param name="deviation">Of monotony.</param>
     public static IReadOnlyList<Day> Continue(
-        string person, IReadOnlyList<Day> before, IReadOnlyList<ActivityOnDay> activities, LocalDate to, PersonPlan plan)
+        string person,
+        IReadOnlyList<Day> before,
+        IReadOnlyList<ActivityOnDay> activities,
+        LocalDate to,
+        PersonPlan plan,
+        LoadDeviation deviation = LoadDeviation.Sample)
     {
-        var loads = LoadTrend.After(before);
+        var loads = LoadTrend.After(before, deviation);
         var sessions = SessionTrend.After(before);
         var regions = BodyRegions.All.Select(region => StimulusTrend.After(region, before)).ToList();
         return CalendarDates.Lay(before.Count == 0 ? null : before[^1], activities, to, plan)
@@ -43,9 +49,11 @@ public static class LoadCalendar
     /// <summary>The same days by another quantity. Of a stretch that began earlier the trends of the first 28 are not to be used.</summary>
     /// <param name="load">What a session of a day has of it, or null.</param>
     /// <param name="firstCovered">The first date with a known value, where that is known already.</param>
-    public static IReadOnlyList<Day> By(IReadOnlyList<Day> days, Func<Day, DaySession, double?> load, LocalDate? firstCovered)
+    /// <param name="deviation">Of monotony.</param>
+    public static IReadOnlyList<Day> By(
+        IReadOnlyList<Day> days, Func<Day, DaySession, double?> load, LocalDate? firstCovered, LoadDeviation deviation = LoadDeviation.Sample)
     {
-        var trend = new LoadTrend(firstCovered);
+        var trend = new LoadTrend(deviation, firstCovered);
         return [.. days.Select(day => trend.Add(day with
         {
             LoadError = null,

@@ -1,7 +1,7 @@
 // Monotony = mean / standard deviation of 7 daily loads; strain = load of the week x monotony.
 // Foster 1998, Med Sci Sports Exerc 30:1164-1168.
-// Rest days count as 0. Departures: the paper does not say which standard deviation, here n - 1; equal loads have none, so no monotony;
-// one unknown day leaves both unknown.
+// Rest days count as 0. Departures: nothing that could be read says which standard deviation, so it is a choice (LoadDeviation), n - 1 by default; equal
+// loads have none, so no monotony; one unknown day leaves both unknown.
 namespace LoadWatch.Days;
 
 /// <summary>How evenly the load of a week is spread.</summary>
@@ -11,7 +11,7 @@ internal static class LoadSpread
 
     /// <summary>Of the last 7 loads, dimensionless; null unless all are known and they differ, by more than a number can hold the square of.</summary>
     /// <param name="loads">Oldest first.</param>
-    public static double? Monotony(ReadOnlySpan<double?> loads)
+    public static double? Monotony(ReadOnlySpan<double?> loads, LoadDeviation over)
     {
         if (LoadWindow.Of(loads, 0, Days) is not { Known: Days } week || AllEqual(loads[^Days..]))
         {
@@ -25,7 +25,7 @@ internal static class LoadSpread
             squares += (load!.Value - mean) * (load.Value - mean);
         }
 
-        var deviation = Math.Sqrt(squares / (Days - 1));
+        var deviation = Math.Sqrt(squares / (over == LoadDeviation.Sample ? Days - 1 : Days));
         return deviation > 0 && double.IsFinite(deviation) ? Significant.Round(mean / deviation) : null;
     }
 

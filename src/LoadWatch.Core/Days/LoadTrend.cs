@@ -10,8 +10,9 @@ using NodaTime;
 namespace LoadWatch.Days;
 
 /// <summary>One person's load trends. Takes every date in order, oldest first.</summary>
+/// <param name="deviation">Of monotony.</param>
 /// <param name="firstCovered">The first date with known load, where that is known already.</param>
-internal sealed class LoadTrend(LocalDate? firstCovered = null)
+internal sealed class LoadTrend(LoadDeviation deviation, LocalDate? firstCovered = null)
 {
     private const int KnownOf7 = 5;
     private const int KnownOf21 = 17;
@@ -27,15 +28,15 @@ internal sealed class LoadTrend(LocalDate? firstCovered = null)
     private LocalDate? firstCovered = firstCovered;
 
     /// <summary>The trends as they stood on the last of some days: all of them, or the last <see cref="LoadCalendar.LookBackDays"/>.</summary>
-    public static LoadTrend After(IReadOnlyList<Day> days)
+    public static LoadTrend After(IReadOnlyList<Day> days, LoadDeviation deviation)
     {
         if (days.Count == 0)
         {
-            return new LoadTrend();
+            return new LoadTrend(deviation);
         }
 
         var last = days[^1];
-        var trend = new LoadTrend(last.DaysSinceFirstCovered is { } ago ? last.Date.PlusDays(-ago) : null);
+        var trend = new LoadTrend(deviation, last.DaysSinceFirstCovered is { } ago ? last.Date.PlusDays(-ago) : null);
         foreach (var day in days)
         {
             trend.loads.Add(day.Load);
@@ -56,7 +57,7 @@ internal sealed class LoadTrend(LocalDate? firstCovered = null)
         var covered = firstCovered <= day.Date ? Period.DaysBetween(firstCovered.Value, day.Date) : (int?)null;
         var sums = Sums(covered);
         var (averageAcute, averageChronic) = (acuteAverage.Add(day.Load), chronicAverage.Add(day.Load));
-        var monotony = LoadSpread.Monotony(Loads);
+        var monotony = LoadSpread.Monotony(Loads, deviation);
         var (usual, change) = weeks.Add(day.Date, sums.Acute, sums.Coverage7, day.Plan);
         Learn(sums.Chronic);
         return day with

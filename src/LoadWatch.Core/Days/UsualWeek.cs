@@ -10,9 +10,28 @@ internal readonly record struct UsualWeek(double Load, int Weeks)
     /// <param name="weeks">So many ordinary ones count, the newest.</param>
     public static UsualWeek? Of(IEnumerable<PastWeek> before, int weeks, int wanted)
     {
-        var loads = before.Where(week => week.IsOrdinary).Take(weeks).Select(week => week.Load!.Value).Order().ToList();
+        var loads = Newest(before, weeks);
+        loads.Sort();
         return loads.Count < wanted || loads.Count == 0
             ? null
             : new UsualWeek(Significant.Round((loads[(loads.Count - 1) / 2] + loads[loads.Count / 2]) / 2), loads.Count);
+    }
+
+    private static List<double> Newest(IEnumerable<PastWeek> before, int weeks)
+    {
+        var loads = new List<double>(weeks);
+        foreach (var week in before)
+        {
+            if (week.IsOrdinary)
+            {
+                loads.Add(week.Load!.Value);
+                if (loads.Count == weeks)
+                {
+                    break;
+                }
+            }
+        }
+
+        return loads;
     }
 }

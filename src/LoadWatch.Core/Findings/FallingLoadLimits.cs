@@ -3,7 +3,7 @@ using System.Text.Json.Serialization;
 
 namespace LoadWatch.Findings;
 
-/// <summary>Limits of the rule <c>falling_load</c>: the usual load is fading. All a choice; 0.34 has a basis in studies of reduced volume.</summary>
+/// <summary>Limits of the rule <c>falling_load</c>: the usual load is fading. All a choice; 0.34 has a basis in studies of reduced volume, the notice and its delay are fitted by simulation.</summary>
 public sealed record FallingLoadLimits : IDelayedLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
@@ -14,7 +14,7 @@ public sealed record FallingLoadLimits : IDelayedLimits
 
     /// <summary>A notice under this share of the usual week. Share.</summary>
     [Range(0.1, 0.95)]
-    public double Notice { get; init; } = 0.6;
+    public double Notice { get; init; } = 0.55;
 
     /// <summary>A warning under this share of the usual week. Share.</summary>
     [Range(0.0, 0.95)]
@@ -37,9 +37,9 @@ public sealed record FallingLoadLimits : IDelayedLimits
     [Range(3, 12)]
     public int WeeksWanted { get; init; } = 6;
 
-    /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. A choice. Days.</summary>
+    /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. Fitted by simulation. Days.</summary>
     [Range(1, 14)]
-    public int OnDays { get; init; } = 1;
+    public int OnDays { get; init; } = 3;
 
     /// <summary>Dates in a row, of those that can be read, on which it must be so no more before it is over. A choice. Days.</summary>
     [Range(1, 14)]

@@ -18,7 +18,7 @@ internal sealed class FallingLoadRecord : RuleRecord
     public override string DataNeeded => "Known load on 10 of the 14 days, and 6 ordinary weeks among the 8 before.";
 
     public override string Basis =>
-        "Spiering, Mujika, Sharp and Foulis 2021, J Strength Cond Res 35:1449-1458, for about a third; the other limits are a choice.";
+        "Spiering, Mujika, Sharp and Foulis 2021, J Strength Cond Res 35:1449-1458, for about a third; the other limits are a choice, the notice and its delay fitted by simulation.";
 
     public override int Rank => 7;
 

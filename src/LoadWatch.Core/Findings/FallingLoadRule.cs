@@ -1,7 +1,8 @@
 // Mean week of the last 14 days against the median of the 8 weeks before: ratio = (7 x sum of 14 days / known days) / median week, the same as the 14-day sum
 // against twice the median week.
 // Endurance was kept for up to 15 weeks when volume was cut by 33 to 66 % and intensity kept: Spiering, Mujika, Sharp and Foulis 2021, J Strength Cond Res
-// 35:1449-1458. Below 34 % lies outside of what was shown; 60 % and the return value are a choice.
+// 35:1449-1458. Below 34 % lies outside of what was shown; the return value is a choice; 55 % and the delay were fitted by simulation
+// (tests/README.md).
 // Departures: the group's load stands for volume, and intensity is not looked at here.
 using System.Runtime.InteropServices;
 using LoadWatch.Days;

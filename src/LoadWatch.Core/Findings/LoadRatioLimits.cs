@@ -12,13 +12,13 @@ public sealed record LoadRatioLimits : IDelayedLimits
     /// <summary>Quantities that are watched beside the group's load, by name: built-in ones, or what a table states.</summary>
     public IReadOnlyList<string> Quantities { get; init; } = [];
 
-    /// <summary>Raised at this uncoupled ratio or above. 1.8 uncoupled is 1.5 coupled, by algebra; the limit is a choice. Dimensionless.</summary>
+    /// <summary>Raised at this uncoupled ratio or above. 2.2 uncoupled is 1.69 coupled, by algebra; the limit is fitted by simulation. Dimensionless.</summary>
     [Range(1.0, 10.0)]
-    public double Raise { get; init; } = 1.8;
+    public double Raise { get; init; } = 2.2;
 
-    /// <summary>Returns below this ratio. A choice. Dimensionless.</summary>
+    /// <summary>Returns below this ratio. Fitted by simulation. Dimensionless.</summary>
     [Range(0.5, 10.0)]
-    public double Return { get; init; } = 1.6;
+    public double Return { get; init; } = 1.8;
 
     /// <summary>The first covered day lies at least this many days back. A choice. Days.</summary>
     [Range(28, 365)]
@@ -38,9 +38,9 @@ public sealed record LoadRatioLimits : IDelayedLimits
     [Range(0.0, 1.0)]
     public double ChronicShareOfMedian { get; init; } = 0.4;
 
-    /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. A choice. Days.</summary>
+    /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. Fitted by simulation. Days.</summary>
     [Range(1, 14)]
-    public int OnDays { get; init; } = 1;
+    public int OnDays { get; init; } = 2;
 
     /// <summary>Dates in a row, of those that can be read, on which it must be so no more before it is over. A choice. Days.</summary>
     [Range(1, 14)]

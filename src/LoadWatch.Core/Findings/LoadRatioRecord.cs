@@ -18,7 +18,7 @@ internal sealed class LoadRatioRecord : RuleRecord
     public override string DataNeeded => "Known load on most of the last 7 and of the last 28 days, and four weeks since the first known day.";
 
     public override string Basis =>
-        "Windt and Gabbett 2018, Br J Sports Med 53:988-990, for the uncoupled ratio; that it is watched, its limit, coverage and return value are a choice. It describes change, nothing else.";
+        "Windt and Gabbett 2018, Br J Sports Med 53:988-990, for the uncoupled ratio; that it is watched and its coverage are a choice; limit, return value and delay were fitted by simulation. It describes change, nothing else.";
 
     public override int Rank => 0;
 

@@ -1,7 +1,7 @@
 // Acute load against the usual week, uncoupled: U = 7-day load / mean week of the 21 days before.
 // Windt and Gabbett 2018, Br J Sports Med 53:988-990;
-// the limit of 1.8 uncoupled is 1.5 coupled: C = 4 U / (U + 3). That a limit is watched at all, its value, coverage and return value are
-// a choice: the ratio describes change and nothing else.
+// the limit of 2.2 uncoupled is 1.69 coupled: C = 4 U / (U + 3). That a limit is watched at all and its coverage are a choice; its value, return value and
+// delay were fitted by simulation (tests/README.md): the ratio describes change and nothing else.
 using LoadWatch.Days;
 using LoadWatch.Plans;
 using NodaTime;

@@ -66,7 +66,7 @@ public sealed class MonotonyRule : IRule
         limits.Raise,
         "ratio",
         Sentence(date, since, read, limits, subject.LoadUnit),
-        Basis(read, limits, subject.LoadUnit));
+        Basis(read, limits, subject));
 
     private static string Sentence(LocalDate date, LocalDate since, EvenWeek read, MonotonyLimits limits, string unit)
     {
@@ -78,16 +78,16 @@ public sealed class MonotonyRule : IRule
         return $"Load of the last 7 days {varies} little at more than the usual week ({numbers}){Wording.NotKnownSince(read.Date, date)}; {limit}.";
     }
 
-    private static Evidence Basis(EvenWeek read, MonotonyLimits limits, string unit) => new(
-        "monotony = mean / standard deviation (n - 1) of the last 7 days; strain = load of the last 7 days x monotony; the strain against a quantile of the person's "
+    private static Evidence Basis(EvenWeek read, MonotonyLimits limits, RuleSubject subject) => new(
+        $"monotony = mean / standard deviation ({Over(subject.Deviation)}) of the last 7 days; strain = load of the last 7 days x monotony; the strain against a quantile of the person's "
             + "own strains before (nearest rank upward)",
         "Foster 1998, Med Sci Sports Exerc 30:1164-1168; the limit of monotony is a convention, the others a choice",
         [
             new("monotony", read.Monotony, "ratio", $"on {Wording.IsoDate(read.Date)}"),
-            new("strain", read.Strain, unit),
-            new("acute", read.Acute, unit, "load of the last 7 days"),
-            new("chronic_before", read.Usual, unit, "mean week of the 21 days before"),
-            new("strain_of_own_quantile", read.Own?.Quantile, unit),
+            new("strain", read.Strain, subject.LoadUnit),
+            new("acute", read.Acute, subject.LoadUnit, "load of the last 7 days"),
+            new("chronic_before", read.Usual, subject.LoadUnit, "mean week of the 21 days before"),
+            new("strain_of_own_quantile", read.Own?.Quantile, subject.LoadUnit),
             new("strains", read.Own?.Count, "days"),
             new("raise", limits.Raise, "ratio"),
             new("return", limits.Return, "ratio"),
@@ -97,6 +97,8 @@ public sealed class MonotonyRule : IRule
             new("strains_wanted", limits.StrainsWanted, "days"),
             new("look_back", limits.LookBackDays, "days"),
         ]);
+
+    private static string Over(LoadDeviation deviation) => deviation == LoadDeviation.Sample ? "n - 1" : "n";
 
     /// <summary>What a date shows.</summary>
     private sealed record EvenWeek(LocalDate Date, double Monotony, double Strain, double Acute, double Usual, OwnStrains? Own);

@@ -2,7 +2,7 @@ using System.ComponentModel.DataAnnotations;
 
 namespace LoadWatch.Findings;
 
-/// <summary>Limits of the rule <c>not_usable</c>: recordings came, but too little of them can be used. All a choice.</summary>
+/// <summary>Limits of the rule <c>not_usable</c>: recordings came, but too little of them can be used. All a choice; the number of sessions is fitted by simulation.</summary>
 public sealed record NotUsableLimits : IDelayedLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
@@ -10,7 +10,7 @@ public sealed record NotUsableLimits : IDelayedLimits
 
     /// <summary>Sessions that raise it. Count.</summary>
     [Range(1, 20)]
-    public int Sessions { get; init; } = 2;
+    public int Sessions { get; init; } = 3;
 
     /// <summary>Over with so many of them, or fewer. Count.</summary>
     [Range(0, 19)]

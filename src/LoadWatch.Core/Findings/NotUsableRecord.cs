@@ -18,7 +18,7 @@ internal sealed class NotUsableRecord : RuleRecord
     public override string DataNeeded => "A recorded day with heart rate or power.";
 
     public override string Basis =>
-        "A choice.";
+        "A choice; the number of sessions was fitted by simulation.";
 
     public override int Rank => 10;
 

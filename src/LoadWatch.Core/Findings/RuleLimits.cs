@@ -2,7 +2,7 @@ using System.Text.Json.Serialization;
 
 namespace LoadWatch.Findings;
 
-/// <summary>The limits of the rules, each at its default. A group may set its own.</summary>
+/// <summary>The limits of the rules, each at its default. A group may set its own. Where a default was fitted, the tables are in tests/README.md.</summary>
 public sealed record RuleLimits
 {
     /// <summary>Acute load well above the usual.</summary>
@@ -43,6 +43,18 @@ public sealed record RuleLimits
 
     /// <summary>Function tests that were not done again in time.</summary>
     public TestOverdueLimits TestOverdue { get; init; } = new();
+
+    /// <summary>
+    /// What a clinic's visits are not about is off. With two visits a week, of which one in seven is missing, a week's load lies as far from the usual by chance as by
+    /// doubling; even weeks and days in a row mean little there.
+    /// </summary>
+    public static RuleLimits OfClinic() => new()
+    {
+        LoadRatio = new() { Enabled = false },
+        WeeklyJump = new() { Enabled = false },
+        Monotony = new() { Enabled = false },
+        HardDays = new() { Enabled = false },
+    };
 
     /// <summary>Every quantity that some rule in force watches beside the group's load, each once, in ordinal order.</summary>
     [JsonIgnore]

@@ -25,6 +25,9 @@ public sealed record RuleSubject(Person Person, IReadOnlyList<Day> Days, RuleLim
     /// <summary>Name of the quantity that is the group's load.</summary>
     public string LoadQuantity { get; init; } = QuantityNames.BanisterTrimp;
 
+    /// <summary>The standard deviation that the days' monotony rests on.</summary>
+    public LoadDeviation Deviation { get; init; }
+
     /// <summary>The load that each session counts with on its day, by key of the activity; null where that is the quantity as the activity has it.</summary>
     public IReadOnlyDictionary<string, double?>? SessionLoads { get; init; }
 

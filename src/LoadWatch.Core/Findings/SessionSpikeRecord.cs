@@ -18,7 +18,7 @@ internal sealed class SessionSpikeRecord : RuleRecord
     public override string DataNeeded => "Enough sessions with a load, or runs with a distance, in the days before.";
 
     public override string Basis =>
-        "The bands of runs from 10 % and from 30 % are those of Schuster Brandt Frandsen et al. 2025, Br J Sports Med (from memory); that they raise something, and every other number, is a choice.";
+        "The bands of runs from 10 % and from 30 % are those of Schuster Brandt Frandsen et al. 2025, Br J Sports Med (from memory); that the higher one raises a notice, and every other number, is a choice, fitted by simulation but for the doubled load.";
 
     public override int Rank => 5;
 

@@ -1,6 +1,7 @@
 // One session against the largest of the 30 days before: excess = (session - largest) / largest.
 // Running distance: the bands from 10 % and from 30 % are those of Schuster Brandt Frandsen et al. 2025, Br J Sports Med, a cohort of 5,205 runners (from memory, not
-// checked against the paper); that they raise something here is a choice. Every other session by its load: limits and counts are a choice.
+// checked against the paper); of healthy runners simulated the lower one told far too often, so the notice begins at the higher one and the warning at twice that
+// (tests/README.md). Every other session by its load: limits and counts are a choice, the notice and the sessions wanted fitted by the same simulation.
 using LoadWatch.Loads;
 using NodaTime;
 

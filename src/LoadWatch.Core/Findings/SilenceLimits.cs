@@ -2,7 +2,7 @@ using System.ComponentModel.DataAnnotations;
 
 namespace LoadWatch.Findings;
 
-/// <summary>Limits of the rule <c>silence</c>: expected recordings did not come, by the rhythm of the person's own recordings. All a choice.</summary>
+/// <summary>Limits of the rule <c>silence</c>: expected recordings did not come, by the rhythm of the person's own recordings. All a choice; missed sessions and extra days are fitted by simulation.</summary>
 public sealed record SilenceLimits : IRuleLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
@@ -14,7 +14,7 @@ public sealed record SilenceLimits : IRuleLimits
 
     /// <summary>Days beyond that quantile. Days.</summary>
     [Range(0, 30)]
-    public int ExtraDays { get; init; } = 2;
+    public int ExtraDays { get; init; } = 3;
 
     /// <summary>Gaps wanted before a rhythm counts as known. Count.</summary>
     [Range(3, 100)]
@@ -26,7 +26,7 @@ public sealed record SilenceLimits : IRuleLimits
 
     /// <summary>Where the plan expects recordings: planned sessions in a row without one. Count.</summary>
     [Range(1, 20)]
-    public int PlannedMissed { get; init; } = 2;
+    public int PlannedMissed { get; init; } = 3;
 
     /// <summary>Days that a recording of a planned session may take to come in. Days.</summary>
     [Range(0, 14)]

@@ -18,7 +18,7 @@ internal sealed class SilenceRecord : RuleRecord
     public override string DataNeeded => "The person's own rhythm of 6 gaps or more, or a plan that says which sessions bring a recording.";
 
     public override string Basis =>
-        "A choice.";
+        "A choice; missed sessions and extra days were fitted by simulation.";
 
     public override int Rank => 3;
 

@@ -3,7 +3,7 @@ using LoadWatch.Stimulus;
 
 namespace LoadWatch.Findings;
 
-/// <summary>Limits of the rule <c>stimulus_low</c>: too few heavy-or-fast days of a body region in 14 days. All a choice.</summary>
+/// <summary>Limits of the rule <c>stimulus_low</c>: too few heavy-or-fast days of a body region in 14 days. All a choice; share and floor are fitted by simulation.</summary>
 public sealed record StimulusLowLimits : IDelayedLimits
 {
     private static readonly IReadOnlyList<BodyRegion> LegsOnly = [BodyRegion.Legs];
@@ -16,7 +16,7 @@ public sealed record StimulusLowLimits : IDelayedLimits
 
     /// <summary>Share of the person's usual heavy-or-fast days in 14 days; fewer raise it. 0 to 1.</summary>
     [Range(0.0, 1.0)]
-    public double UsualShare { get; init; } = 0.5;
+    public double UsualShare { get; init; } = 0.35;
 
     /// <summary>Under <see cref="OlderFrom"/>: heavy-or-fast days in 14 days; fewer raise it. Days; 0: none.</summary>
     [Range(0, 14)]
@@ -28,7 +28,7 @@ public sealed record StimulusLowLimits : IDelayedLimits
 
     /// <summary>From <see cref="OlderFrom"/>: the same. Days; 0: none.</summary>
     [Range(0, 14)]
-    public int OlderFloorDays { get; init; } = 3;
+    public int OlderFloorDays { get; init; } = 2;
 
     /// <summary>Days above the limit that end it, as far as the usual reaches so high. Days.</summary>
     [Range(0, 7)]

@@ -18,7 +18,7 @@ internal sealed class StimulusLowRecord : RuleRecord
     public override string DataNeeded => "The region seen on most of the 14 days, and for 8 weeks.";
 
     public override string Basis =>
-        "A choice; the floor from 60 on comes from guidelines that ask for muscle strengthening on 2 or more days a week (WHO 2020, Bull et al., Br J Sports Med 54:1451-1462): one visit missed is none.";
+        "A choice, share and floor from 60 on fitted by simulation. Guidelines ask for muscle strengthening on 2 or more days a week (WHO 2020, Bull et al., Br J Sports Med 54:1451-1462): under 2 in 14 days is less than half of that.";
 
     public override int Rank => 11;
 

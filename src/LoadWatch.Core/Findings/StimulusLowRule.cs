@@ -1,6 +1,7 @@
-// Heavy-or-fast days of a body region among the last 14, against half of the person's usual number in 14 days (their number among the 56 days before,
+// Heavy-or-fast days of a body region among the last 14, against a share of the person's usual number in 14 days (their number among the 56 days before,
 // scaled to the known ones, over 4) and against a floor by age. All a choice; guidelines for older people ask for muscle strengthening on 2 or more days
-// a week (WHO 2020, Bull et al., Br J Sports Med 54:1451-1462), which is where the floor of 3 in 14 days comes from: one visit missed is none.
+// a week (WHO 2020, Bull et al., Br J Sports Med 54:1451-1462), of which the floor of 2 in 14 days is half: of people with two visits a week, one in seven
+// missed, a floor of 3 told too often in simulation (tests/README.md).
 using LoadWatch.Days;
 using LoadWatch.People;
 using LoadWatch.Stimulus;

@@ -3,7 +3,7 @@ using System.Text.Json.Serialization;
 
 namespace LoadWatch.Findings;
 
-/// <summary>Limits of the rule <c>weekly_jump</c>: this week far above the last ordinary one. All a choice.</summary>
+/// <summary>Limits of the rule <c>weekly_jump</c>: this week far above the last ordinary one. All a choice; the first three numbers are fitted by simulation.</summary>
 public sealed record WeeklyJumpLimits : IDelayedLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
@@ -12,17 +12,17 @@ public sealed record WeeklyJumpLimits : IDelayedLimits
     /// <summary>Quantities that are watched beside the group's load, by name: built-in ones, or what a table states.</summary>
     public IReadOnlyList<string> Quantities { get; init; } = [];
 
-    /// <summary>Raised when the last 7 days lie this fraction or more above the last ordinary week. Fraction, 0.4 is 40 % more.</summary>
+    /// <summary>Raised when the last 7 days lie this fraction or more above the last ordinary week. Fraction, 0.3 is 30 % more.</summary>
     [Range(0.05, 5.0)]
-    public double Raise { get; init; } = 0.4;
+    public double Raise { get; init; } = 0.3;
 
     /// <summary>Returns below this fraction. Fraction.</summary>
     [Range(0.0, 5.0)]
-    public double Return { get; init; } = 0.25;
+    public double Return { get; init; } = 0.15;
 
     /// <summary>Raised only when the last 7 days exceed the median of the ordinary weeks before by this factor too. Dimensionless.</summary>
     [Range(1.0, 5.0)]
-    public double UsualFactor { get; init; } = 1.2;
+    public double UsualFactor { get; init; } = 1.5;
 
     /// <summary>Ordinary weeks of that median. Count.</summary>
     [Range(3, 12)]

@@ -1,6 +1,7 @@
 // Rolling week against the last ordinary week: change = (A - B) / B, and A against the median M of ordinary weeks.
 // A: load of the last 7 days, B: load of the newest week before them that is not skipped, M: median of the ordinary weeks (PastWeek).
-// That weekly changes are kept small is advice of Soligard et al. 2016, Br J Sports Med 50:1030-1041 (from memory; the evidence is weak). Every number is a choice.
+// That weekly changes are kept small is advice of Soligard et al. 2016, Br J Sports Med 50:1030-1041 (from memory; the evidence is weak). Every number is a choice;
+// raise, return and the factor of the usual were fitted by simulation (tests/README.md).
 // Departure from the plain change of a week: a light week, the off-season, travel, an absence, a return and a week without any load are stepped over, so that
 // a usual week after one of them is no jump; a week of which too little is known is not.
 using LoadWatch.Days;

@@ -18,12 +18,13 @@ internal sealed class TrialDate
     private readonly IReadOnlyList<Day> before;
     private readonly LocalDate date;
     private readonly DayPlan plan;
+    private readonly LoadDeviation deviation;
     private readonly RuleSubject bare;
     private readonly Dictionary<double, Day> days = [];
 
     public TrialDate(Person person, Group group, IReadOnlyList<Day> before, LocalDate date, DayPlan plan)
     {
-        (this.person, this.before, this.date, this.plan) = (person, before, date, plan);
+        (this.person, this.before, this.date, this.plan, deviation) = (person, before, date, plan, group.Deviation);
         var limits = Undelayed(group.Limits);
         var near = before.TakeLast(limits.SessionSpike.LookBackDays).ToList();
         var session = new DaySession(Key, Sport.Generic.ToString(), null, new Dictionary<string, double>(), new Dictionary<Channel, double>(), AddsLoad: true);
@@ -45,7 +46,7 @@ internal sealed class TrialDate
     {
         if (!days.TryGetValue(load, out var day))
         {
-            days[load] = day = LoadTrend.After(before).Add(new Day { Person = person.Id, Date = date, State = DayState.Recorded, Load = load, DaysSinceRecorded = 0, Plan = plan });
+            days[load] = day = LoadTrend.After(before, deviation).Add(new Day { Person = person.Id, Date = date, State = DayState.Recorded, Load = load, DaysSinceRecorded = 0, Plan = plan });
         }
 
         return day;

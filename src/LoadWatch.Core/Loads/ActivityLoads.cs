@@ -21,7 +21,7 @@ public sealed record ActivityLoads(
         var top = SessionLoads.Find(ofSpeed, QuantityNames.SpeedTop)?.Value;
         var ofHistograms = HistogramLoads.Of(usable.Histograms, usable.Recording.Sport, top, date, person, anchors, settings);
         var (ofSets, remark) = SetTotals.Of(usable.Recording.Sets, settings.Equations.OneRepetitionMaxByRepetitions);
-        IEnumerable<Quantity> quantities = [.. ofHistograms.Quantities, .. ExternalLoads.Of(usable), .. ofSpeed, .. ofSets];
+        IEnumerable<Quantity> quantities = [.. ofHistograms.Quantities, .. ExternalLoads.Of(usable), .. ofSpeed, .. ofSets, .. EffortMinutes.Of(usable, date, person, anchors, settings.Equations)];
         return new ActivityLoads(
             [.. quantities.OrderBy(quantity => quantity.Name, StringComparer.Ordinal)],
             ofHistograms.TimesInZone,

@@ -8,7 +8,7 @@ public static class LoadUnits
     {
         QuantityNames.BanisterTrimp or QuantityNames.EdwardsLoad or QuantityNames.LuciaLoad or QuantityNames.StagnoLoad
             or QuantityNames.IndividualTrimp or QuantityNames.FosterLoad => "AU",
-        QuantityNames.Minutes => "min",
+        QuantityNames.Minutes or QuantityNames.MinutesModerate or QuantityNames.MinutesVigorous => "min",
         QuantityNames.Distance or QuantityNames.Climb => "m",
         _ when quantity.StartsWith(DistanceAbove.Prefix, StringComparison.Ordinal) => "m",
         QuantityNames.Work => "kJ",

@@ -33,6 +33,12 @@ public static class QuantityNames
     /// <summary>Timer time, else elapsed time, minutes (min).</summary>
     public const string Minutes = "minutes";
 
+    /// <summary>Time at 3 METs and more by step cadence, speed or power, minutes (min).</summary>
+    public const string MinutesModerate = "minutes_moderate";
+
+    /// <summary>The part of it at 6 METs and more, minutes (min).</summary>
+    public const string MinutesVigorous = "minutes_vigorous";
+
     /// <summary>Distance, metres (m).</summary>
     public const string Distance = "distance";
 
@@ -72,8 +78,8 @@ public static class QuantityNames
     /// <summary>Every quantity that a group's load may be, whatever the bounds of the speed zones and the shares of the best speed.</summary>
     public static IReadOnlyList<string> All { get; } =
     [
-        BanisterTrimp, EdwardsLoad, LuciaLoad, StagnoLoad, IndividualTrimp, FosterLoad, Minutes, Distance, Climb, Accelerations, Decelerations, Work,
-        Sets, Repetitions, Kilograms,
+        BanisterTrimp, EdwardsLoad, LuciaLoad, StagnoLoad, IndividualTrimp, FosterLoad, Minutes, MinutesModerate, MinutesVigorous, Distance, Climb, Accelerations,
+        Decelerations, Work, Sets, Repetitions, Kilograms,
     ];
 
     /// <summary>The same, the distances above those bounds that are fast (<see cref="DistanceAbove"/>), and those above shares of the best speed

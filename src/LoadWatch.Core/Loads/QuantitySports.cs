@@ -13,6 +13,7 @@ public static class QuantitySports
         QuantityNames.Sets or QuantityNames.Repetitions or QuantityNames.Kilograms => !IsEndurance(sport),
         QuantityNames.Accelerations or QuantityNames.Decelerations => !IsEndurance(sport) && sport.Name != Training || sport.IsOnFoot || sport.IsTeamSport,
         QuantityNames.Distance or QuantityNames.Climb => sport.Name != Training,
+        QuantityNames.MinutesModerate or QuantityNames.MinutesVigorous => sport.IsOnFoot || sport.Family == "cycling" || sport.Name == Sport.Generic.Name,
         _ when quantity.StartsWith(DistanceAbove.Prefix, StringComparison.Ordinal) => sport.IsOnFoot || sport.IsTeamSport || sport.Name == Sport.Generic.Name,
         _ => true,
     };

@@ -16,6 +16,8 @@ public static class QuantityWords
         QuantityNames.FosterLoad => "load by rating of effort",
         QuantityNames.Rating => "rating of effort",
         QuantityNames.Minutes => "training time",
+        QuantityNames.MinutesModerate => "time of moderate effort and more",
+        QuantityNames.MinutesVigorous => "time of vigorous effort",
         QuantityNames.Distance => "distance",
         QuantityNames.Climb => "climb",
         QuantityNames.SpeedTop => "top speed",

@@ -1,3 +1,4 @@
+using LoadWatch.Days;
 using LoadWatch.Findings;
 using NodaTime;
 
@@ -12,4 +13,7 @@ public sealed record Group(string Id, string Name, string LoadQuantity, RuleLimi
 
     /// <summary>Local time at which a day of its people begins.</summary>
     public LocalTime DayBeginsAt { get; init; } = LocalTime.Midnight;
+
+    /// <summary>The standard deviation that the monotony of its people rests on; the same for all groups.</summary>
+    public LoadDeviation Deviation { get; init; } = LoadDeviation.Sample;
 }

@@ -36,6 +36,9 @@ public sealed record StrengthSet(
     /// <summary>Declared fast: jumps, throws, lifts as fast as possible.</summary>
     public bool IsFast { get; init; }
 
+    /// <summary>Measured mean speed of the lifting phase, metres per second, above 0.</summary>
+    public double? BarSpeedMetresPerSecond { get; init; }
+
     /// <summary>Length of the lifting phase of one repetition in seconds, above 0.</summary>
     public double? ConcentricSeconds { get; init; }
 }

@@ -22,6 +22,7 @@ public sealed record ReplayedPerson(Person Person, Group Group, IReadOnlyList<Da
     {
         LoadUnit = LoadUnits.Of(Group.LoadQuantity),
         LoadQuantity = Group.LoadQuantity,
+        Deviation = Group.Deviation,
         SessionLoads = Days.SelectMany(day => day.Sessions).ToDictionary(session => session.Key, session => session.Load, StringComparer.Ordinal),
         Activities = [.. Days.SelectMany(day => day.Sessions.Select(session => session.On(day.Date)))],
         Plan = Plan,
@@ -29,7 +30,7 @@ public sealed record ReplayedPerson(Person Person, Group Group, IReadOnlyList<Da
         Series = limits.Quantities.ToDictionary(name => name, name => new QuantitySeries(name, LoadUnits.Of(name), By(name)), StringComparer.Ordinal),
     });
 
-    private IReadOnlyList<Day> By(string name) => LoadCalendar.By(Days, (day, session) => Value(name, day, session), firstCovered: null);
+    private IReadOnlyList<Day> By(string name) => LoadCalendar.By(Days, (day, session) => Value(name, day, session), firstCovered: null, Group.Deviation);
 
     private double? Value(string name, Day day, DaySession session)
     {

@@ -1,3 +1,4 @@
+using System.Text.Json.Serialization;
 using LoadWatch.Recordings;
 using NodaTime;
 
@@ -32,4 +33,9 @@ public sealed record SetRow(
     double? Seconds,
     SetLoad Load,
     bool IsHold,
-    bool IsFast) : RowContent;
+    bool IsFast) : RowContent
+{
+    /// <summary>Measured mean speed of the lifting phase, metres per second, above 0.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public double? BarSpeedMetresPerSecond { get; init; }
+}

@@ -1,9 +1,10 @@
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// Relative drive of a repetition that was declared fast. Source: Desmedt and Godaux 1977, Ballistic contractions in man, J Physiol 264:673-693: units
+/// Relative drive of a repetition that was fast, by a measured speed of the bar or as declared. Source: Desmedt and Godaux 1977, Ballistic contractions in man, J Physiol 264:673-693: units
 /// join a ballistic contraction at about a third of the force at which they join a slow one (the third from memory, configurable as the factor 3).
-/// Mid and high e = min(1, factor x L), L = load / one-repetition maximum; low e = L, since nobody saw the speed. Read so from 30 % of the maximum, where power
+/// Mid and high e = min(1, factor x L), L = load / one-repetition maximum; low e = L, since the third is not certain and
+/// mostly nobody saw the speed. Read so from 30 % of the maximum, where power
 /// training begins, up to the line of hard work, from which on a repetition is hard at any speed; the range in print is 30 to 60 %, the rest a choice
 /// so that a heavier load never counts for less.
 /// </summary>

@@ -112,8 +112,10 @@ public static class Gradients
             if (!double.IsNaN(heightMetres))
             {
                 count += sign;
-                way += sign * metres;
-                height += sign * heightMetres;
+
+                // Of none there is nothing left, not the rounding of what came and went.
+                way = count == 0 ? 0 : way + (sign * metres);
+                height = count == 0 ? 0 : height + (sign * heightMetres);
             }
         }
     }

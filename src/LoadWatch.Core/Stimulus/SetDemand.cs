@@ -16,8 +16,11 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
     /// <summary>What each repetition counts for, s; of a hold, the part of it that is read.</summary>
     public double SecondsEach { get; init; } = 1;
 
-    /// <summary>How many times the load a repetition counts that was declared fast.</summary>
+    /// <summary>How many times the load a repetition counts that was fast.</summary>
     public double FastFactor { get; init; } = 1;
+
+    /// <summary>Whether it was declared fast, but measured slower.</summary>
+    public bool IsSlowerThanDeclared { get; init; }
 
     /// <summary>Whether the maximum of the exercise alone stood in for that of the machine.</summary>
     public bool IsMaximumBorrowed { get; init; }
@@ -29,8 +32,8 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
     /// read at e = hardness / 10 and what came before is left out: a lower bound, a choice. The load is not asked: a maximum of lifting is none of
     /// holding.</item>
     /// <item>No repetitions: unknown.</item>
-    /// <item>Fast, with load and maximum, within <see cref="FastDrive"/>: <see cref="SetRule.Fast"/>, C. Without either: <see
-    /// cref="SetRule.DeclaredFast"/>, D; the reserve is not asked, fast work ends long before failure.</item>
+    /// <item>Fast, with load and maximum, within <see cref="FastDrive"/>: <see cref="SetRule.Fast"/>, B by a measured speed of the bar, C as declared; one that
+    /// was measured slower is not fast. Without either: <see cref="SetRule.DeclaredFast"/>, D; the reserve is not asked, fast work ends long before failure.</item>
     /// <item>Load and maximum: <see cref="SetRule.LoadAndMaximum"/>; A with a counted reserve against a freshly measured maximum of this machine, else
     /// B.</item>
     /// <item>Repetitions done and in reserve up to 12: <see cref="SetRule.Chart"/>; B with a load, D without (body weight, band, pin).</item>
@@ -51,7 +54,7 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
         }
 
         var demand = stated.Kilograms is { } load && SetMaximum.Of(set, date, person, anchors) is { } maximum
-            ? FromMaximum(stated, repetitions, load, maximum, equations.FastLoadFactor)
+            ? FromMaximum(stated, repetitions, load, maximum, equations)
             : set.IsFast
                 ? new SetDemand(repetitions, 0, 0, Reserve: null, Grade.D, SetRule.DeclaredFast)
                 : FromRepetitions(stated, repetitions, equations.OneRepetitionMaxByRepetitions);
@@ -92,12 +95,19 @@ public sealed record SetDemand(int Repetitions, double RelativeLoad, double Rela
             : (null, "hardness of the hold");
     }
 
-    private static SetDemand FromMaximum(StatedSet stated, int repetitions, double load, SetMaximum maximum, double fastFactor)
+    private static SetDemand FromMaximum(StatedSet stated, int repetitions, double load, SetMaximum maximum, EquationChoices equations)
     {
         var share = load / maximum.Kilograms;
-        var demand = stated.Set.IsFast && FastDrive.Applies(share)
-            ? new SetDemand(repetitions, share, maximum.RelativeError, Reserve: null, Grade.C, SetRule.Fast) { FastFactor = fastFactor }
-            : new SetDemand(repetitions, share, maximum.RelativeError, stated.Reserve, GradeOf(stated, maximum), SetRule.LoadAndMaximum);
+        bool? isMeasuredFast = stated.BarSpeed is { } speed ? speed >= equations.FastBarSpeed : null;
+        var demand = (isMeasuredFast ?? stated.Set.IsFast) && FastDrive.Applies(share)
+            ? new SetDemand(repetitions, share, maximum.RelativeError, Reserve: null, isMeasuredFast is null ? Grade.C : Grade.B, SetRule.Fast)
+            {
+                FastFactor = equations.FastLoadFactor,
+            }
+            : new SetDemand(repetitions, share, maximum.RelativeError, stated.Reserve, GradeOf(stated, maximum), SetRule.LoadAndMaximum)
+            {
+                IsSlowerThanDeclared = stated.Set.IsFast && isMeasuredFast == false && FastDrive.Applies(share),
+            };
         return demand with { IsMaximumBorrowed = !maximum.IsOfMachine };
     }
 

@@ -10,7 +10,8 @@ internal static class SetRemarks
             (demand => demand is { Rule: SetRule.LoadAndMaximum, Reserve: null }, "repetitions in reserve", "a lower bound"),
             (demand => demand.IsMaximumBorrowed, "maximum on the machine", "that of the exercise stands in"),
             (demand => demand.Rule == SetRule.DeclaredFast, "load or maximum", "counted as hard because they were declared fast"),
-            (demand => demand.Rule == SetRule.Fast, "speed", "fast as declared"),
+            (demand => demand is { Rule: SetRule.Fast, Grade: Grade.C }, "speed", "fast as declared"),
+            (demand => demand.IsSlowerThanDeclared, "speed", "declared fast, measured slower: read by the load"),
             (demand => demand.Rule == SetRule.Hold, "force", "held, only the last 3 s are read, by the rating"),
         ];
         return remarks

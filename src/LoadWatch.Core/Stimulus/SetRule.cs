@@ -9,7 +9,7 @@ public enum SetRule
     /// <summary>Load by the chart, or the equation chosen instead, from repetitions done and in reserve.</summary>
     Chart,
 
-    /// <summary>Declared fast, with load and maximum.</summary>
+    /// <summary>Measured or declared fast, with load and maximum.</summary>
     Fast,
 
     /// <summary>Declared fast, and nothing else known of it.</summary>

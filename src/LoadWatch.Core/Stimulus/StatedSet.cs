@@ -13,6 +13,7 @@ internal sealed record StatedSet(StrengthSet Set)
     private const int MostRepetitions = 1000;
     private const double MostHardness = 10;
     private const double MostConcentricSeconds = 20;
+    private const double FastestBar = 10;
 
     /// <summary>1 or more.</summary>
     public int? Repetitions => Set.Repetitions is >= 1 and <= MostRepetitions ? Set.Repetitions : null;
@@ -37,6 +38,9 @@ internal sealed record StatedSet(StrengthSet Set)
 
     /// <summary>Length of a repetition's lifting phase, s: 1 (an assumption) unless stated; the length of a set holds pauses and lowering too.</summary>
     public double RepetitionSeconds => Set.ConcentricSeconds is { } stated and > 0 and <= MostConcentricSeconds ? stated : 1;
+
+    /// <summary>Mean speed of the lifting phase, m/s, above 0.</summary>
+    public double? BarSpeed => Set.BarSpeedMetresPerSecond is > 0 and <= FastestBar ? Set.BarSpeedMetresPerSecond : null;
 
     private double? Hardness => Set.Hardness is >= 0 and <= MostHardness ? Set.Hardness : null;
 }

@@ -27,6 +27,7 @@ public static class BuiltInTables
         [
             Field("session", "order"), Field("time"), Field("exercise"), Field("machine"), Field("set"), Field("repetitions"), Field("kilograms"),
             Field("pin"), Field("reserve", "repetitions_in_reserve"), Field("hardness"), Field("seconds"), Field("load"), Field("hold"), Field("fast"),
+            Field("bar_speed_m_s", "bar_speed") with { Unit = "m/s" },
         ]);
 
     public static CsvLayout Tests { get; } = Table(

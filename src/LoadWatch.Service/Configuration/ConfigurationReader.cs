@@ -150,6 +150,7 @@ public sealed class ConfigurationReader
             {
                 LoadFallbacks = entry.LoadFallbacks,
                 DayBeginsAt = LocalTimePattern.CreateWithInvariantCulture("HH:mm").Parse(entry.DayBeginsAt).Value,
+                Deviation = file.Computation.Equations.MonotonyDeviation,
             };
             if (!groups.TryAdd(entry.Id, group))
             {

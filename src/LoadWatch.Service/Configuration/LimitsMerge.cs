@@ -45,7 +45,9 @@ public static class LimitsMerge
     /// <summary>What a clinic's visits are not about.</summary>
     internal static JsonObject OfKind(JsonElement group) =>
         group.TryGetProperty("kind", out var kind) && Enum.Parse<GroupKind>(kind.GetString()!, ignoreCase: true) == GroupKind.Clinic
-            ? new JsonObject { ["monotony"] = new JsonObject { ["enabled"] = false }, ["hard_days"] = new JsonObject { ["enabled"] = false } }
+            ? new JsonObject(RuleBook.All
+                .Where(rule => !rule.LimitsOf(RuleLimits.OfClinic()).Enabled)
+                .Select(rule => KeyValuePair.Create(rule.Name, (JsonNode?)new JsonObject { ["enabled"] = false })))
             : [];
 
     private static RuleLimits Read(JsonObject limits) => limits.Deserialize<RuleLimits>(ConfigurationJson.Options)!;

@@ -116,7 +116,7 @@ public sealed record GroupEntry
     /// <summary>The name that briefs show; blank shows the id.</summary>
     public string Name { get; init; } = "";
 
-    /// <summary>What it is: in a <c>clinic</c> the rules of monotony and of hard days are off, unless its own limits turn them on.</summary>
+    /// <summary>What it is: in a <c>clinic</c> the rules of ratio, jump, monotony and hard days are off, unless its own limits turn them on.</summary>
     public GroupKind Kind { get; init; } = GroupKind.Squad;
 
     /// <summary>

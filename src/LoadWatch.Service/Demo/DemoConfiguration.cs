@@ -25,8 +25,8 @@ internal static class DemoConfiguration
 
           "groups": [
             { "id": "boat", "name": "Rowing squad" },
-            // The clinic writes sets down and records no heart rate.
-            { "id": "class", "name": "Strength class", "load_quantity": "sets" },
+            // The clinic writes sets down and records no heart rate; rules that compare weeks or days in a row are off there.
+            { "id": "class", "name": "Strength class", "kind": "clinic", "load_quantity": "sets" },
             { "id": "masters", "name": "Masters" }
           ],
 

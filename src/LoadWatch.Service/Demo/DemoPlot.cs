@@ -15,8 +15,11 @@ public enum DemoPlot
     /// <summary>The strap gives 0 for the last three weeks; power is still there.</summary>
     StrapFailed,
 
-    /// <summary>Nothing came for nine days.</summary>
-    SilentNineDays,
+    /// <summary>One row of more than two hours, with a day off before and after it.</summary>
+    LongRow,
+
+    /// <summary>Nothing came for thirteen days.</summary>
+    SilentThirteenDays,
 
     /// <summary>On holiday for two weeks, and nobody was told.</summary>
     SilentTwoWeeks,

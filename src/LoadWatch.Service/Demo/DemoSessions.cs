@@ -21,7 +21,12 @@ public static class DemoSessions
     {
         var random = DemoRandom.For(seed, person.Part.Id, planned.Start);
         var minutes = planned.Slot.Minutes * random.Factor(person.Part.Week.LengthDeviation);
-        return planned.Slot.Kind is SessionKind.RowIntervals or SessionKind.RideIntervals ? Efforts.Intervals(random).Sum(effort => effort.Seconds) / 60.0 : minutes;
+        return planned.Slot.Kind switch
+        {
+            SessionKind.RowIntervals or SessionKind.RideIntervals => Efforts.Intervals(random).Sum(effort => effort.Seconds) / 60.0,
+            SessionKind.RowLong => planned.Slot.Minutes,
+            _ => minutes,
+        };
     }
 
     public static FitActivity Record(DemoPerson person, PlannedSession planned, int seed)
@@ -33,6 +38,7 @@ public static class DemoSessions
         var activity = planned.Slot.Kind switch
         {
             SessionKind.Row => Row(bare, person, Efforts.Steady(random, minutes), random),
+            SessionKind.RowLong => Row(bare, person, Efforts.Steady(random, planned.Slot.Minutes), random),
             SessionKind.RowIntervals => Row(bare, person, Efforts.Intervals(random), random),
             SessionKind.Ride => Ride(bare, person, Efforts.Steady(random, minutes), random),
             SessionKind.RideIntervals => Ride(bare, person, Efforts.Intervals(random), random),

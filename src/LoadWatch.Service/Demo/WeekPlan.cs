@@ -8,6 +8,7 @@ public enum SessionKind
 {
     Row,
     RowIntervals,
+    RowLong,
     Gym,
     ClassAll,
     ClassArms,
@@ -17,7 +18,7 @@ public enum SessionKind
 
 /// <summary>One session of a usual week.</summary>
 /// <param name="At">Local start.</param>
-/// <param name="Minutes">Usual length; intervals are as long as their efforts.</param>
+/// <param name="Minutes">Usual length; intervals are as long as their efforts, the long row is as long as it says.</param>
 public sealed record WeekSlot(IsoDayOfWeek Day, LocalTime At, SessionKind Kind, int Minutes);
 
 /// <summary>A usual week. Rest days stand alone, or in pairs where three days are trained, so no week looks heavier because its rest is not known yet.</summary>
@@ -80,11 +81,14 @@ public sealed record WeekPlan(double LengthDeviation, IReadOnlyList<WeekSlot> Sl
     public static IReadOnlyList<WeekSlot> TwoRowsADay { get; } =
         [.. Enum.GetValues<IsoDayOfWeek>().Where(day => day != None).SelectMany(RowsOf)];
 
+    /// <summary>More than twice as long as any row of a usual week.</summary>
+    public static WeekSlot RowAcrossTheLake(IsoDayOfWeek day) => new(day, Forenoon, SessionKind.RowLong, 135);
+
     public IEnumerable<WeekSlot> On(IsoDayOfWeek day) => Slots.Where(slot => slot.Day == day);
 
     private static IEnumerable<WeekSlot> RowsOf(IsoDayOfWeek day)
     {
-        yield return new(day, Morning, day == Tuesday ? SessionKind.RowIntervals : SessionKind.Row, 43);
-        yield return new(day, Afternoon, SessionKind.Row, day == Tuesday ? 55 : 38);
+        yield return new(day, Morning, day == Tuesday ? SessionKind.RowIntervals : SessionKind.Row, 47);
+        yield return new(day, Afternoon, SessionKind.Row, day == Tuesday ? 60 : 42);
     }
 }

@@ -3,6 +3,7 @@ using System.Text;
 using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.Notices;
+using LoadWatch.People;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
 using LoadWatch.Service.Pipeline;
@@ -40,7 +41,7 @@ public static class DayExplanation
             text.AppendLine(CultureInfo.InvariantCulture, $"    {quiet.Sentence(day.Date)}");
         }
 
-        AppendTrends(text, day, configuration.GroupOf(known).LoadQuantity);
+        AppendTrends(text, day, configuration.GroupOf(known));
         DayTrendText.Append(text, day, session.Days.Before(known.Id, day.Date.PlusDays(1), day.Date));
         RoomText.Append(text, new TodaysLimits(configuration, basis), session, known, date is null ? [day.Date, day.Date.PlusDays(1)] : [day.Date]);
         ReferenceExplanation.Append(text, known, configuration.GroupOf(known), basis, day.Date);
@@ -83,9 +84,9 @@ public static class DayExplanation
         _ => day <= (decision.Until ?? decision.From),
     };
 
-    private static void AppendTrends(StringBuilder text, Day day, string quantity)
+    private static void AppendTrends(StringBuilder text, Day day, Group group)
     {
-        Line(text, $"load ({quantity})", day.Load);
+        Line(text, $"load ({group.LoadQuantity})", day.Load);
         Line(text, "acute: sum of 7 days, scaled to the covered ones", day.Acute);
         Line(text, "chronic: mean week of 28 days, scaled to the covered ones", day.Chronic);
         Line(text, "mean week of days 8 to 28 back", day.ChronicBefore);
@@ -93,7 +94,7 @@ public static class DayExplanation
         Line(text, "ratio, uncoupled = acute / mean week of days 8 to 28 back", day.RatioUncoupled);
         Line(text, "ratio of exponential averages, 7 and 28 days (Williams 2017)", day.RatioEwma);
         Line(text, "change against the week before, fraction", day.WeeklyChange);
-        Line(text, "monotony = mean / SD (n - 1) of 7 days (Foster 1998)", day.Monotony);
+        Line(text, $"monotony = mean / SD ({(group.Deviation == LoadDeviation.Sample ? "n - 1" : "n")}) of 7 days (Foster 1998)", day.Monotony);
         Line(text, "strain = week x monotony (Foster 1998)", day.Strain);
         Line(text, "share of 7 days with known load", day.Coverage7);
         Line(text, "share of 28 days with known load", day.Coverage28);

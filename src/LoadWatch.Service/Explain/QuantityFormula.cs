@@ -11,6 +11,8 @@ public sealed record QuantityFormula(string Formula, string Source)
 {
     private const string NoSource = "a plain total, no source needed";
     private const string Practice = "common practice, no published source";
+    private const string Effort = "steps a minute, else by speed and climb, or by power and body mass";
+    private const string EffortSource = "Tudor-Locke et al. 2019, 2020, 2021, Int J Behav Nutr Phys Act; Bushman 2020, ACSM's Health Fit J 24(4)";
 
     /// <summary>Null for a quantity that a table states: it is taken as it stands.</summary>
     public static QuantityFormula? Of(string quantity, EquationChoices equations) => quantity switch
@@ -40,6 +42,8 @@ public sealed record QuantityFormula(string Formula, string Source)
         QuantityNames.Accelerations or QuantityNames.Decelerations => new(
             "efforts of 2.5 m/s2 or more, by the slope of speed over half a second",
             "bound and sampling: Harper, Carling and Kiely 2019, Sports Med 49:1923; how long an effort lasts is a choice"),
+        QuantityNames.MinutesModerate => new("minutes of 3 METs and more by " + Effort, EffortSource),
+        QuantityNames.MinutesVigorous => new("minutes of 6 METs and more by " + Effort, EffortSource),
         QuantityNames.Sets or QuantityNames.Repetitions => new("counted over the working sets", NoSource),
         QuantityNames.Kilograms => new("sum of kilograms x repetitions over the working sets", NoSource),
         _ when quantity.StartsWith(QuantityNames.OneRepetitionMaxOf, StringComparison.Ordinal) => OfMaximum(equations.OneRepetitionMaxByRepetitions),

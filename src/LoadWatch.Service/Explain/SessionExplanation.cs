@@ -167,7 +167,7 @@ public sealed class SessionExplanation
         var computed = (recorded?.Values.Quantities ?? []).Select(one => one.Name).ToHashSet(StringComparer.Ordinal);
         foreach (var quantity in activity.Quantities)
         {
-            Line(string.Create(CultureInfo.InvariantCulture, $"{quantity.Name} = {quantity.Value:0.###} {quantity.Unit}{(quantity.Estimated ? " (estimated)" : "")}"));
+            Line(QuantityText.Of(quantity));
             var formula = QuantityFormula.Of(quantity.Name, equations);
             Below(formula is null ? "as a table states it" : $"formula  {formula.Formula}");
             if (formula is not null)

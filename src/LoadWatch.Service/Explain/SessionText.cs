@@ -22,7 +22,7 @@ internal static class SessionText
 
         foreach (var quantity in activity.Quantities)
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    {quantity.Name} = {quantity.Value:0.###} {quantity.Unit}{(quantity.Estimated ? " (estimated)" : "")}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {QuantityText.Of(quantity)}");
         }
 
         AppendStimulus(text, activity);

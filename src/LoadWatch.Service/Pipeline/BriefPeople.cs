@@ -31,13 +31,14 @@ public sealed class BriefPeople(WorkingConfiguration configuration, Instant now,
 
     /// <summary>Everybody of whom a contact is told, as on a date.</summary>
     /// <param name="told">The position among the changes of alerts up to which the contact was told; null: nothing yet.</param>
+    /// <param name="isFirst">No earlier date had a brief: all that stands is new.</param>
     /// <param name="inboxIsAway">As the brief is built.</param>
-    public IReadOnlyList<BriefSubject> Of(Contact contact, LocalDate date, long? told, bool inboxIsAway)
+    public IReadOnlyList<BriefSubject> Of(Contact contact, LocalDate date, long? told, bool isFirst, bool inboxIsAway)
     {
         var news = told is { } position ? Since(position) : null;
         var withPlan = BriefForms.On(contact, date).Contains(BriefForm.ClassSheet);
         var subjects = configuration.PeopleOf(contact)
-            .Select(person => (withPlan ? Planned(person, date) : Recent(person)) with { Alerts = Alerts(person, news) })
+            .Select(person => (withPlan ? Planned(person, date) : Recent(person)) with { Alerts = Alerts(person, news, isFirst) })
             .ToList();
         var named = BriefBuilder.Pictured(contact, date, subjects, inboxIsAway);
         return subjects.ConvertAll(subject => named.Contains(subject.Person.Id) ? subject with { Days = Pictured(subject) } : subject);
@@ -106,10 +107,10 @@ public sealed class BriefPeople(WorkingConfiguration configuration, Instant now,
         return session.Days.OfPerson(person.Id, through.PlusDays(1 - count), through);
     }
 
-    /// <summary>A contact who was never told anything is told what stands, all of it new, and of no return.</summary>
-    private List<AlertNews> Alerts(Person person, AlertsSince? news) =>
+    /// <summary>A contact who was never told anything is told of no return.</summary>
+    private List<AlertNews> Alerts(Person person, AlertsSince? news, bool isFirst) =>
     [
-        .. Open(person.Id).Where(alert => alert.State is AlertState.Unacknowledged or AlertState.Acknowledged).Select(alert => new AlertNews(alert, news is null || news.IsNew(alert.Id), false, false)),
+        .. Open(person.Id).Where(alert => alert.State is AlertState.Unacknowledged or AlertState.Acknowledged).Select(alert => new AlertNews(alert, isFirst || news!.IsNew(alert.Id), false, false)),
         .. news?.OverOf(person.Id) ?? [],
     ];
 

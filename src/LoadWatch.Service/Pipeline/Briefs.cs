@@ -120,8 +120,10 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     private Brief Build(StoreSession session, BriefPeople people, Contact contact, LocalDate date)
     {
         // New is what no brief of an earlier date told: the page of a morning stays the same after that morning's brief was decided.
-        var told = session.Notices.LastBrief(contact.Id, date)?.AlertPosition;
-        return BriefBuilder.Build(contact, date, people.Of(contact, date, told, inboxesAway.Count > 0), Questions(session, contact), inboxesAway.Count > 0);
+        var earlier = session.Notices.LastBrief(contact.Id, date);
+        var told = earlier ?? session.Notices.LastBrief(contact.Id, date.PlusDays(1));
+        var subjects = people.Of(contact, date, told?.AlertPosition, isFirst: earlier is null, inboxesAway.Count > 0);
+        return BriefBuilder.Build(contact, date, subjects, Questions(session, contact), inboxesAway.Count > 0);
     }
 
     private List<BriefLine> Questions(StoreSession session, Contact contact) =>

@@ -47,7 +47,8 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
         IsDone = first is null || Period.DaysBetween(first.Value, through) < StretchDays;
         var to = IsDone ? through : first!.Value.PlusDays(StretchDays - 1);
         var training = PersonTraining.Of(session, configuration, basis, person, first ?? replaced, IsDone ? null : to.PlusDays(LoadCalendar.SettledDaysBack));
-        var series = first is { } start ? Series(session, training, start, to) : new PersonSeries([], []);
+        var changes = Changes(session, before.Count == 0 ? first ?? replaced : before[0].Date, to);
+        var series = first is { } start ? Series(session, training, start, to, changes) : new PersonSeries([], []);
         var stretch = new DayStretch(person.Id, replaced, IsDone ? null : to, series, [.. Questions(training).Where(question => question.About >= replaced && (IsDone || question.About <= to))])
         {
             Through = through,
@@ -57,7 +58,7 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
         (replacedTo, next) = (to, to.PlusDays(1));
         var wanted = Wanted(to.PlusDays(1));
         before = [.. before.Concat(series.Days).Where(day => day.Date >= wanted)];
-        return IsDone && series.Days.Count > 0 ? stretch with { Room = Room(session, to.PlusDays(1)) } : stretch;
+        return IsDone && series.Days.Count > 0 ? stretch with { Room = Room(session, to.PlusDays(1), changes) } : stretch;
     }
 
     private IReadOnlyList<Day> Begin(StoreSession session)
@@ -70,25 +71,25 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
     /// <summary>The first of the days that are looked back at from a date.</summary>
     private LocalDate Wanted(LocalDate date) => TodaysLimits.First(periods.Value, date);
 
-    private TodaysRoom Room(StoreSession session, LocalDate date) =>
-        TodaysLimits.Behind(person, configuration.GroupOf(person), before!, plans.Of(session, person, date, date), Changes(session, date, date));
+    private TodaysRoom Room(StoreSession session, LocalDate date, ReferenceChanges changes) =>
+        TodaysLimits.Behind(person, configuration.GroupOf(person), before!, plans.Of(session, person, date, date), changes);
 
     private static LocalDate? Earlier(LocalDate? one, LocalDate? other) => one is { } a && other is { } b ? LocalDate.Min(a, b) : one ?? other;
 
-    private PersonSeries Series(StoreSession session, JoinResult training, LocalDate first, LocalDate to)
+    private PersonSeries Series(StoreSession session, JoinResult training, LocalDate first, LocalDate to, ReferenceChanges changes)
     {
         var since = before!.Count == 0 ? LocalDate.MinIsoValue : first;
         var tests = session.TableRows.OfPerson(person.Id, RowKind.Tests, since, to).Select(row => new DatedTest(row.Date, (TestRow)row.Content)).ToList();
         var counted = training.Activities.Where(activity => activity.Date <= through);
-        return PersonSeries.Continue(person, configuration.GroupOf(person), before, [.. counted], tests, plans.Of(session, person, since, to), to, Changes(session, first, to));
+        return PersonSeries.Continue(person, configuration.GroupOf(person), before, [.. counted], tests, plans.Of(session, person, since, to), to, changes);
     }
 
-    private ReferenceChanges Changes(StoreSession session, LocalDate first, LocalDate to) => new(periods.Value, () => new RestatedSessions(
+    private ReferenceChanges Changes(StoreSession session, LocalDate since, LocalDate to) => new(periods.Value, () => new RestatedSessions(
         person,
         basis.AnchorsOf(person),
         configuration.Computation,
         periods.Value.Quantities,
-        session.Activities.Histograms(person.Id, before!.Count == 0 ? first : before[0].Date, to)));
+        session.Activities.Histograms(person.Id, since, to)));
 
     private IEnumerable<Question> Questions(JoinResult training) => training.Questions
         .Select(question => new Question(person.Id, question.MayWait ? question.Date.PlusDays(WaitDays) : question.Date, question.Sentence, question.Date))

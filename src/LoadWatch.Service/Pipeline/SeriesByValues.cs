@@ -37,7 +37,7 @@ internal sealed class SeriesByValues(Person person, Group group, ReferenceChange
         var days = stored.Where(day => day.Date >= reach).ToList();
         var restated = Restated(days);
         var other = restated.TakeWhile(day => day.Date < period.LoadFrom).ToList();
-        return other.Count == 0 ? restated : [.. LoadCalendar.By(other, (_, session) => session.Load, FirstCovered(days, from)), .. restated.Skip(other.Count)];
+        return other.Count == 0 ? restated : [.. LoadCalendar.By(other, (_, session) => session.Load, FirstCovered(days, from), group.Deviation), .. restated.Skip(other.Count)];
     }
 
     /// <summary>Days of which some are of later periods.</summary>
@@ -45,7 +45,7 @@ internal sealed class SeriesByValues(Person person, Group group, ReferenceChange
     public IReadOnlyList<Day> Of(IReadOnlyList<Day> own, IReadOnlyList<Day> now)
     {
         var restated = Restated(own);
-        return CoveredAs(now, LoadCalendar.By(restated, (_, session) => session.Load, LongAgo(restated)));
+        return CoveredAs(now, LoadCalendar.By(restated, (_, session) => session.Load, LongAgo(restated), group.Deviation));
     }
 
     /// <summary>A first covered day that lies far enough back for every trend.</summary>

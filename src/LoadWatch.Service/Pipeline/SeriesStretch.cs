@@ -28,7 +28,7 @@ internal sealed class SeriesStretch(Person person, Group group, PersonPlan plan,
         var carried = last?.Carried ?? Carried.Nothing;
         var order = new LoadOrder(
             group.LoadQuantity, group.LoadFallbacks, [.. past.Select(Loads).Concat(loads)], person.HeartRateIsValidOn, view is null ? last?.Carried.Loads : view.CarriedLoads(last, from), last?.Date.PlusDays(1));
-        var days = LoadCalendar.Continue(person.Id, before, [.. training.Select(activity => OnDay(activity, order))], to, plan);
+        var days = LoadCalendar.Continue(person.Id, before, [.. training.Select(activity => OnDay(activity, order))], to, plan, group.Deviation);
         if (days.Count == 0)
         {
             return new PersonSeries([], []);
@@ -44,6 +44,7 @@ internal sealed class SeriesStretch(Person person, Group group, PersonPlan plan,
             Memory = memory,
             LoadUnit = LoadUnits.Of(group.LoadQuantity),
             LoadQuantity = group.LoadQuantity,
+            Deviation = group.Deviation,
             SessionLoads = SessionLoads(all),
             Activities = [.. past, .. training.Where(activity => activity.Date <= to).OrderBy(activity => activity.Date).ThenBy(activity => activity.Key, StringComparer.Ordinal)],
             Plan = plan,
@@ -114,7 +115,7 @@ internal sealed class SeriesStretch(Person person, Group group, PersonPlan plan,
         !carried.FirstCovered.TryGetValue(name, out var first) || (view is not null && view.IsNew(from) && first >= before[0].Date) ? null : first;
 
     private IReadOnlyList<Day> By(string name, IReadOnlyList<Day> days, LocalDate? firstCovered) =>
-        LoadCalendar.By(days, (day, session) => Value(name, day, session), firstCovered);
+        LoadCalendar.By(days, (day, session) => Value(name, day, session), firstCovered, group.Deviation);
 
     /// <summary>Of a quantity beside the load a session has what it has: nothing stands in for it.</summary>
     private double? Value(string name, Day day, DaySession session)

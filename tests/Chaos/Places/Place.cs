@@ -163,7 +163,8 @@ public sealed class Place : IDisposable
               "inboxes": [{ "name": "inbox", "path": "inbox", "take": "{{options.Take}}" }],
               "groups": [{ "id": "squad", "name": "Squad" }],
               "contacts": [{{string.Join(", ", contacts)}}],
-              "intake": { "scan_seconds": 5 }{{mail}}
+              "intake": { "scan_seconds": 5 },
+              "limits": { "silence": { "extra_days": 2 } }{{mail}}
             }
 
             """;

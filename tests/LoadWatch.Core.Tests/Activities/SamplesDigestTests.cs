@@ -25,6 +25,7 @@ public class SamplesDigestTests
             Plain with { Load = SetLoad.Band },
             Plain with { IsHold = true },
             Plain with { IsFast = true },
+            Plain with { BarSpeedMetresPerSecond = 2 },
         ];
 
         Assert.Equal(sets.Length, sets.Select(Of).Distinct().Count());

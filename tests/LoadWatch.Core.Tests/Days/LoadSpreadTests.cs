@@ -1,3 +1,5 @@
+using LoadWatch.Days;
+using LoadWatch.Plans;
 using static LoadWatch.Tests.Days.Training;
 
 namespace LoadWatch.Tests.Days;
@@ -14,6 +16,20 @@ public class LoadSpreadTests
     public void MonotonyAndStrainOfAWeek(double[] loads, double monotony, double strain)
     {
         var day = Daily(loads)[^1];
+
+        Near(monotony, day.Monotony, 1e-6);
+        Near(strain, day.Strain, 1e-6);
+    }
+
+    /// <summary>Hand calculation, the same weeks over n; the third and fourth are the root of 5/2 and of 3/4.</summary>
+    [Theory]
+    [InlineData(new double[] { 300, 0, 450, 200, 0, 600, 150 }, 1.168944, 1987.205)]
+    [InlineData(new double[] { 245, 240, 250, 240, 245, 240, 240 }, 66.67949, 113355.1)]
+    [InlineData(new double[] { 400, 400, 400, 400, 400, 0, 0 }, 1.581139, 3162.278)]
+    [InlineData(new double[] { 120, 0, 120, 0, 120, 0, 0 }, 0.866025, 311.7691)]
+    public void OverNTheyAreLarger(double[] loads, double monotony, double strain)
+    {
+        var day = LoadCalendar.Continue("anna", [], [.. loads.Select((load, at) => Activity(at, load))], On(loads.Length - 1), PersonPlan.None, LoadDeviation.Population)[^1];
 
         Near(monotony, day.Monotony, 1e-6);
         Near(strain, day.Strain, 1e-6);

@@ -105,7 +105,7 @@ public class FallingLoadRuleTests
     [Fact]
     public void AQuantityHasFindingsOfItsOwn()
     {
-        var limits = Defaults with { FallingLoad = new FallingLoadLimits { Quantities = ["distance_above_5_5_m_s"] } };
+        var limits = Stated with { FallingLoad = Stated.FallingLoad with { Quantities = ["distance_above_5_5_m_s"] } };
         var series = new QuantitySeries("distance_above_5_5_m_s", "m", DaysOf([.. Usual, .. Same(30, 14)]));
         var found = Rule.Evaluate(new RuleSubject(Anna, DaysOf([.. Usual, .. Same(100, 14)]), limits)
         {

@@ -40,7 +40,7 @@ public class FindingRunTests
     /// <summary>Each date taken up from what was kept of the one before (I-5).</summary>
     private static string Stands(int on, int off, string dates)
     {
-        var limits = Defaults with { LoadRatio = new LoadRatioLimits { OnDays = on, OffDays = off } };
+        var limits = Stated with { LoadRatio = Stated.LoadRatio with { OnDays = on, OffDays = off } };
         var (carried, stands) = (Carried.Nothing, "");
         Day[] days = [.. dates.Select((word, day) => Ratio(day, Value(word)) with { Plan = DayPlan.None with { Absence = char.IsUpper(word) ? AbsenceWord.Away : null } })];
         for (var day = 0; day < days.Length; day++)

@@ -52,7 +52,7 @@ public class HardDaysRuleTests
         for (var day = 0; day < days.Count; day++)
         {
             var memory = new RuleMemory(carried);
-            taken.AddRange(Rule.Evaluate(new RuleSubject(Anna, [.. days.Take(day + 1)], Defaults) { From = On(day), Memory = memory }));
+            taken.AddRange(Rule.Evaluate(new RuleSubject(Anna, [.. days.Take(day + 1)], Stated) { From = On(day), Memory = memory }));
             carried = Carried.Read(Carried.Write(Carried.Nothing with { Runs = memory.On(On(day)) }));
         }
 
@@ -151,7 +151,7 @@ public class HardDaysRuleTests
     [Fact]
     public void LimitsOfTheGroupCount()
     {
-        var limits = Defaults with { HardDays = new HardDaysLimits { Days = 2, MedianFactor = 1.6 } };
+        var limits = Stated with { HardDays = Stated.HardDays with { Days = 2, MedianFactor = 1.6 } };
 
         Assert.Empty(Rule.Of(DaysOf([.. Usual, .. Repeat(150, 4)]), limits: limits));
         Assert.Equal(2, Rule.Of(DaysOf([.. Usual, .. Repeat(161, 3)]), limits: limits).Count);

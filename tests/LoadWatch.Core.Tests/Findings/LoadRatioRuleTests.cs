@@ -61,7 +61,7 @@ public class LoadRatioRuleTests
     [Fact]
     public void QuantitiesAreWatchedBesideTheLoad()
     {
-        var limits = Defaults with { LoadRatio = new LoadRatioLimits { Quantities = ["sprints", "distance_above_7_m_s", "banister_trimp"] } };
+        var limits = Stated with { LoadRatio = Stated.LoadRatio with { Quantities = ["sprints", "distance_above_7_m_s", "banister_trimp"] } };
         var series = new[]
         {
             new QuantitySeries("distance_above_7_m_s", "m", Ratios(1.9, 2)),
@@ -104,7 +104,7 @@ public class LoadRatioRuleTests
     [Fact]
     public void LimitsOfTheGroupCount()
     {
-        var limits = Defaults with { LoadRatio = new LoadRatioLimits { Raise = 1.5, Return = 1.2 } };
+        var limits = Stated with { LoadRatio = Stated.LoadRatio with { Raise = 1.5, Return = 1.2 } };
 
         Assert.Equal(3, Rule.Of(Ratios(1.4, 1.5, 1.3, 1.2, 1.1), limits: limits).Count);
     }
@@ -135,7 +135,7 @@ public class LoadRatioRuleTests
 
     [Fact]
     public void NamesTheUnitOfTheGroup() =>
-        Assert.Contains("(380 against 200 kJ)", new LoadRatioRule().Evaluate(new RuleSubject(Anna, Ratios(1.9), Defaults) { LoadUnit = "kJ" }).First().Text, StringComparison.Ordinal);
+        Assert.Contains("(380 against 200 kJ)", new LoadRatioRule().Evaluate(new RuleSubject(Anna, Ratios(1.9), Stated) { LoadUnit = "kJ" }).First().Text, StringComparison.Ordinal);
 
     [Fact]
     public void TheEvidenceIsEnoughToComputeTheValueAgain()

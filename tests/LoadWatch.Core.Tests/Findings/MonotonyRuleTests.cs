@@ -34,7 +34,7 @@ public class MonotonyRuleTests
     [InlineData(91, 0)]
     public void StrainsOlderThanTheLookBackDoNotCount(int day, int count)
     {
-        var limits = Defaults with { Monotony = new MonotonyLimits { LookBackDays = 60 } };
+        var limits = Stated with { Monotony = Stated.Monotony with { LookBackDays = 60 } };
         var later = Enumerable.Range(60, 30).Select(at => Week(at, 1, 10));
 
         Assert.Equal(count, Rule.Of([.. History(60), .. later, .. Enumerable.Range(90, day - 90).Select(Unknown), Week(day, 3, 200)], limits: limits).Count);

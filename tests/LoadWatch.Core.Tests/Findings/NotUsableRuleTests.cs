@@ -60,6 +60,6 @@ public class NotUsableRuleTests
         });
         var days = Enumerable.Range(0, 20).Select(day => new Day { Person = "anna", Date = On(day), State = DayState.Recorded }).ToList();
         var person = from < 0 ? Anna : Anna with { HeartRateInvalid = LoadWatch.People.DatePeriods.Since(On(from)) };
-        return new NotUsableRule().Evaluate(new RuleSubject(person, days, new RuleLimits()) { Activities = [.. activities, .. more] }).ToList();
+        return new NotUsableRule().Evaluate(new RuleSubject(person, days, Watched.Stated) { Activities = [.. activities, .. more] }).ToList();
     }
 }

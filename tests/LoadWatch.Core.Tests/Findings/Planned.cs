@@ -47,7 +47,7 @@ internal static class Planned
             sorted.Select((session, place) => new ActivityOnDay($"{place}", session.Date, ["watch"], session[QuantityNames.BanisterTrimp], [])).ToList(),
             On(through),
             plan);
-        return new RuleSubject(Anna, days, Watched.Defaults) { Activities = sorted };
+        return new RuleSubject(Anna, days, Watched.Stated) { Activities = sorted };
     }
 
     private static JoinedActivity Session(int day, string sport, double? load) => new()

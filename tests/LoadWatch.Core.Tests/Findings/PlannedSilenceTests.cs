@@ -52,7 +52,7 @@ public class PlannedSilenceTests
     public void WhoWasThereAndLoggedNothingIsSaidToHaveBeenThere()
     {
         var plan = new PersonPlan { Entries = [], Attendance = new Dictionary<NodaTime.LocalDate, bool> { [On(16)] = true, [On(18)] = false } };
-        var subject = new RuleSubject(Anna, Weeks(3, recorded: day => day < 14), Watched.Defaults) { Plan = plan };
+        var subject = new RuleSubject(Anna, Weeks(3, recorded: day => day < 14), Watched.Stated) { Plan = plan };
 
         Assert.EndsWith(" Last there on 21 January, by the list of attendance.", Rule.Evaluate(subject).First().Text, StringComparison.Ordinal);
     }

@@ -18,7 +18,7 @@ public class RuleBookTests
         RuleBook.All.Select(rule => rule.Name));
 
     [Fact]
-    public void WithoutDaysThereAreNoFindings() => Assert.Empty(RuleBook.Evaluate(new RuleSubject(Anna, [], Watched.Defaults)));
+    public void WithoutDaysThereAreNoFindings() => Assert.Empty(RuleBook.Evaluate(new RuleSubject(Anna, [], Watched.Stated)));
 
     [Fact]
     public void FindingsAreSortedByDateRuleAndRegion()
@@ -55,7 +55,7 @@ public class RuleBookTests
     public void ARuleThatIsOffSaysNothing()
     {
         Assert.Contains(Busy(), finding => finding.Rule == "load_ratio");
-        var off = Watched.Defaults with { LoadRatio = new LoadRatioLimits { Enabled = false } };
+        var off = Watched.Stated with { LoadRatio = Watched.Stated.LoadRatio with { Enabled = false } };
 
         Assert.DoesNotContain(RuleBook.Evaluate(new RuleSubject(Anna, BusyDays(), off)), finding => finding.Rule == "load_ratio");
     }
@@ -80,30 +80,30 @@ public class RuleBookTests
             new() { TestOverdue = new() { Enabled = false } },
         ];
 
-        Assert.All(RuleBook.All, rule => Assert.True(rule.LimitsOf(Watched.Defaults).Enabled));
+        Assert.All(RuleBook.All, rule => Assert.True(rule.LimitsOf(Watched.Stated).Enabled));
         Assert.Equal(RuleBook.All.Select(rule => rule.Name), off.Select(limits => Assert.Single(RuleBook.All, rule => !rule.LimitsOf(limits).Enabled).Name));
     }
 
     [Fact]
     public void TurningARuleOffOrChangingItsLimitsIsNeitherAReturnNorACorrection()
     {
-        var (plan, hash) = (LoadWatch.Plans.DayPlan.None, RuleBook.LimitsHash("load_ratio", Watched.Defaults));
-        var other = Watched.Defaults with { LoadRatio = new() { Raise = 2 } };
+        var (plan, hash) = (LoadWatch.Plans.DayPlan.None, RuleBook.LimitsHash("load_ratio", Watched.Stated));
+        var other = Watched.Stated with { LoadRatio = Watched.Stated.LoadRatio with { Raise = 2 } };
 
-        Assert.Null(RuleBook.WhyQuiet("load_ratio", Watched.Defaults, plan, hash));
+        Assert.Null(RuleBook.WhyQuiet("load_ratio", Watched.Stated, plan, hash));
         Assert.Null(RuleBook.WhyQuiet("load_ratio", other, plan, hashBefore: null));
         Assert.Equal(QuietReason.LimitsChanged, RuleBook.WhyQuiet("load_ratio", other, plan, hash));
         Assert.Equal(QuietReason.SuppressedByPlan, RuleBook.WhyQuiet("load_ratio", other, plan with { ReturnDay = 2 }, hash));
-        Assert.Equal(QuietReason.RuleOff, RuleBook.WhyQuiet("load_ratio", Watched.Defaults with { LoadRatio = new() { Enabled = false } }, plan, hash));
-        Assert.Equal(QuietReason.RuleOff, RuleBook.WhyQuiet("of_a_former_version", Watched.Defaults, plan, hash));
+        Assert.Equal(QuietReason.RuleOff, RuleBook.WhyQuiet("load_ratio", Watched.Stated with { LoadRatio = Watched.Stated.LoadRatio with { Enabled = false } }, plan, hash));
+        Assert.Equal(QuietReason.RuleOff, RuleBook.WhyQuiet("of_a_former_version", Watched.Stated, plan, hash));
     }
 
     [Fact]
     public void TheHashNamesTheLimitsOfOneRule()
     {
-        var other = Watched.Defaults with { Silence = new() { ExtraDays = 3 } };
+        var other = Watched.Stated with { Silence = Watched.Stated.Silence with { ExtraDays = 3 } };
 
-        Assert.All(RuleBook.All, rule => Assert.Equal(rule.Name == "silence", RuleBook.LimitsHash(rule.Name, other) != RuleBook.LimitsHash(rule.Name, new RuleLimits())));
+        Assert.All(RuleBook.All, rule => Assert.Equal(rule.Name == "silence", RuleBook.LimitsHash(rule.Name, other) != RuleBook.LimitsHash(rule.Name, Watched.Stated)));
         Assert.Matches("^[0-9a-f]{16}$", RuleBook.LimitsHash("silence", other));
         Assert.Equal("", RuleBook.LimitsHash("of_a_former_version", other));
     }
@@ -119,7 +119,7 @@ public class RuleBookTests
         };
 
         Assert.Equal(["climb", "distance", "work"], limits.Quantities);
-        Assert.Empty(Watched.Defaults.Quantities);
+        Assert.Empty(Watched.Stated.Quantities);
     }
 
     /// <summary>I-6: whatever stands on the last known date stands as it is over an unknown tail, and nothing else comes up; but for silence, which is about it.</summary>
@@ -154,7 +154,7 @@ public class RuleBookTests
     [Fact]
     public void TheGroupsUnitIsPassedOn() =>
         Assert.Contains(
-            RuleBook.Evaluate(new RuleSubject(Anna, BusyDays(), Watched.Defaults) { LoadUnit = "kJ" }),
+            RuleBook.Evaluate(new RuleSubject(Anna, BusyDays(), Watched.Stated) { LoadUnit = "kJ" }),
             finding => finding.Text.Contains(" kJ)", StringComparison.Ordinal));
 
     [Fact]
@@ -175,5 +175,5 @@ public class RuleBookTests
     private static IReadOnlyList<Day> BusyDays() => Build(60, [
         .. Enumerable.Range(0, 53).Select(day => Activity(day, day < 46 ? 100 : 220, stimulus: Bouts(day == 0 ? 5 : 1)))]);
 
-    private static IReadOnlyList<Finding> Busy() => RuleBook.Evaluate(new RuleSubject(Anna, BusyDays(), Watched.Defaults));
+    private static IReadOnlyList<Finding> Busy() => RuleBook.Evaluate(new RuleSubject(Anna, BusyDays(), Watched.Stated));
 }

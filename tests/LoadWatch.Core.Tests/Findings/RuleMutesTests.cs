@@ -82,11 +82,11 @@ public class RuleMutesTests
     {
         Day[] days = [.. Enumerable.Range(0, 10).Select(day => new Day { Person = "anna", Date = On(day), State = DayState.Unknown, Plan = day < 6 ? DayPlan.None : Plans[PlannedState.OffSeason] })];
 
-        var quiet = Assert.Single(NotWatched.Of(days, Watched.Defaults with { FallingLoad = new() { Enabled = false } }));
+        var quiet = Assert.Single(NotWatched.Of(days, Watched.Stated with { FallingLoad = Watched.Stated.FallingLoad with { Enabled = false } }));
         Assert.Equal((PlannedState.OffSeason, On(6)), (quiet.State, quiet.Since));
         Assert.Equal("not watched (off-season since 11 January): stimulus low, falling capacity", quiet.Sentence(On(9)));
-        Assert.Empty(NotWatched.Of([.. days.Take(6)], Watched.Defaults));
-        Assert.Empty(NotWatched.Of([], Watched.Defaults));
+        Assert.Empty(NotWatched.Of([.. days.Take(6)], Watched.Stated));
+        Assert.Empty(NotWatched.Of([], Watched.Stated));
     }
 
     [Fact]
@@ -96,9 +96,9 @@ public class RuleMutesTests
         Assert.NotEmpty(new SessionSpikeRule().Evaluate(Subject(20, sessions)));
 
         sessions[^1] = sessions[^1] with { UsableShare = new Dictionary<Channel, double> { [Channel.HeartRate] = 0.6 } };
-        var strict = Watched.Defaults with { NotUsable = new() { UsableShare = 0.7 } };
+        var strict = Watched.Stated with { NotUsable = Watched.Stated.NotUsable with { UsableShare = 0.7 } };
         Assert.Empty(new SessionSpikeRule().Evaluate(Subject(20, sessions) with { Limits = strict }));
-        Assert.NotEmpty(new SessionSpikeRule().Evaluate(Subject(20, sessions) with { Limits = strict with { NotUsable = new() { UsableShare = 0.7, Enabled = false } } }));
+        Assert.NotEmpty(new SessionSpikeRule().Evaluate(Subject(20, sessions) with { Limits = strict with { NotUsable = strict.NotUsable with { Enabled = false } } }));
     }
 
     [Fact]
@@ -128,7 +128,7 @@ public class RuleMutesTests
     private static RuleSubject Falling() => new(
         Anna,
         [.. Enumerable.Range(0, 112).Select(day => new Day { Person = "anna", Date = On(day), State = DayState.Recorded })],
-        Watched.Defaults)
+        Watched.Stated)
     {
         Activities =
         [
@@ -167,7 +167,7 @@ public class RuleMutesTests
             "anna",
             [.. sessions.Select((session, day) => new ActivityOnDay($"{day}", session.Date, ["watch"], load(day), [Bouts(heavy(day) ? 5 : 0)]))],
             On(139)).Select(day => day.Date > On(136) ? day with { Plan = plan } : day).ToList();
-        return RuleBook.Evaluate(new RuleSubject(Anna, days, Watched.Defaults)
+        return RuleBook.Evaluate(new RuleSubject(Anna, days, Watched.Stated)
         {
             Activities = sessions,
             Tests = [new DatedTest(On(138), new Rows.TestRow("gait_speed", 0.5, null, null, null, null, null, null, null))],

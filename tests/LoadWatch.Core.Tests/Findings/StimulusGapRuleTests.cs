@@ -132,10 +132,10 @@ public class StimulusGapRuleTests
         {
             Regions = new Dictionary<BodyRegion, RegionDay>(day.Regions) { [BodyRegion.Arms] = day.Regions[BodyRegion.Legs] },
         }).ToList();
-        var limits = Defaults with { StimulusGap = new StimulusGapLimits { Regions = [BodyRegion.Arms, BodyRegion.Legs, BodyRegion.Trunk, BodyRegion.Arms] } };
+        var limits = Stated with { StimulusGap = Stated.StimulusGap with { Regions = [BodyRegion.Arms, BodyRegion.Legs, BodyRegion.Trunk, BodyRegion.Arms] } };
 
         Assert.All(Rule.Of(days), finding => Assert.Equal(BodyRegion.Legs, finding.Region));
         Assert.Equal([BodyRegion.Legs, BodyRegion.Arms], Rule.Of(days, limits: limits).Where(finding => finding.Date == Training.On(12)).Select(finding => finding.Region!.Value).Order());
-        Assert.Empty(Rule.Of(days, limits: Defaults with { StimulusGap = new StimulusGapLimits { Regions = [] } }));
+        Assert.Empty(Rule.Of(days, limits: Stated with { StimulusGap = Stated.StimulusGap with { Regions = [] } }));
     }
 }

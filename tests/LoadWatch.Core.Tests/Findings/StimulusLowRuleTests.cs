@@ -56,7 +56,7 @@ public class StimulusLowRuleTests
     public void WhereTheGapIsNotWatchedItIsRaisedInItsPlace()
     {
         var days = Heavy(90, day => day <= 60 && day % 3 == 0);
-        var limits = Watched.Defaults with { StimulusGap = new() { Enabled = false } };
+        var limits = Watched.Stated with { StimulusGap = Watched.Stated.StimulusGap with { Enabled = false } };
 
         Assert.Contains(Rule.Of(days, limits: limits), finding => finding.Since >= On(70));
     }
@@ -66,11 +66,11 @@ public class StimulusLowRuleTests
     public void TheDelaysAreLimits()
     {
         var days = Visits(100, missed: [73, 78]);
-        var slow = Watched.Defaults with { StimulusLow = new() { OnDays = 7 } };
+        var slow = Watched.Stated with { StimulusLow = Watched.Stated.StimulusLow with { OnDays = 7 } };
 
         Assert.Equal(On(84), Rule.Of(days, birthYear: 1950, limits: slow)[0].Date);
-        Assert.Equal(On(86), Rule.Of(days, birthYear: 1950, limits: Watched.Defaults with { StimulusLow = new() { ReturnExtraDays = 0 } })[^1].Date);
-        Assert.Equal(On(87), Rule.Of(days, birthYear: 1950, limits: Watched.Defaults with { StimulusLow = new() { ReturnExtraDays = 0, OffDays = 2 } })[^1].Date);
+        Assert.Equal(On(86), Rule.Of(days, birthYear: 1950, limits: Watched.Stated with { StimulusLow = Watched.Stated.StimulusLow with { ReturnExtraDays = 0 } })[^1].Date);
+        Assert.Equal(On(87), Rule.Of(days, birthYear: 1950, limits: Watched.Stated with { StimulusLow = Watched.Stated.StimulusLow with { ReturnExtraDays = 0, OffDays = 2 } })[^1].Date);
     }
 
     [Theory]

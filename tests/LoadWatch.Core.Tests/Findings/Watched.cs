@@ -8,7 +8,17 @@ namespace LoadWatch.Tests.Findings;
 /// <summary>Builds single days as rules read them; day 0 is Monday, 5 January 2026.</summary>
 internal static class Watched
 {
-    public static readonly RuleLimits Defaults = new();
+    /// <summary>The limits by which rules are tried one by one, easy to reckon with; how the built-in ones do is for the simulation to say.</summary>
+    public static readonly RuleLimits Stated = new()
+    {
+        LoadRatio = new() { Raise = 1.8, Return = 1.6, OnDays = 1 },
+        WeeklyJump = new() { Raise = 0.4, Return = 0.25, UsualFactor = 1.2 },
+        SessionSpike = new() { RunNotice = 0.1, RunWarning = 0.3, LoadNotice = 0.4, SessionsWanted = 8 },
+        FallingLoad = new() { Notice = 0.6, OnDays = 1 },
+        StimulusLow = new() { UsualShare = 0.5, OlderFloorDays = 3 },
+        Silence = new() { ExtraDays = 2, PlannedMissed = 2 },
+        NotUsable = new() { Sessions = 2 },
+    };
 
     /// <summary>A day on which every condition of the load ratio but the ratio itself is met; null is a day of unknown load.</summary>
     public static Day Ratio(int day, double? ratio) => new()
@@ -46,11 +56,11 @@ internal static class Watched
 
     /// <summary>What holds where the rule is watched.</summary>
     public static List<Finding> Of(this IRule rule, IReadOnlyList<Day> days, int? birthYear = 1990, RuleLimits? limits = null) =>
-        rule.Evaluate(new RuleSubject(Training.Anna with { BirthYear = birthYear }, days, limits ?? Defaults)).Told();
+        rule.Evaluate(new RuleSubject(Training.Anna with { BirthYear = birthYear }, days, limits ?? Stated)).Told();
 
     /// <summary>Without what plan or answers suppress.</summary>
     public static List<Finding> Told(this IEnumerable<Finding> findings) => [.. findings.Where(finding => finding.Severity != Severity.Suppressed)];
 
     public static List<Finding> Suppressed(this IRule rule, IReadOnlyList<Day> days) =>
-        [.. rule.Evaluate(new RuleSubject(Training.Anna, days, Defaults)).Where(finding => finding.Severity == Severity.Suppressed)];
+        [.. rule.Evaluate(new RuleSubject(Training.Anna, days, Stated)).Where(finding => finding.Severity == Severity.Suppressed)];
 }

@@ -15,7 +15,7 @@ public class WeeklyJumpRuleTests
 {
     private static readonly WeeklyJumpRule Rule = new();
     private static readonly double[] Steady = [.. Same(50, 56)];
-    private static readonly RuleLimits AtOnce = Defaults with { WeeklyJump = new WeeklyJumpLimits { OnDays = 1 } };
+    private static readonly RuleLimits AtOnce = Stated with { WeeklyJump = Stated.WeeklyJump with { OnDays = 1 } };
 
     [Fact]
     public void IsRaisedOnTheSecondDayAndHoldsUntilBelowTheReturnValue()
@@ -104,7 +104,7 @@ public class WeeklyJumpRuleTests
     [Fact]
     public void AQuantityHasFindingsOfItsOwnInItsOwnUnit()
     {
-        var limits = Defaults with { WeeklyJump = new WeeklyJumpLimits { Quantities = ["distance", "never_computed"] } };
+        var limits = Stated with { WeeklyJump = Stated.WeeklyJump with { Quantities = ["distance", "never_computed"] } };
         var days = DaysOf([.. Steady, .. Same(50, 14)]);
         var series = new QuantitySeries("distance", "m", DaysOf([.. Same(5000, 56), .. Same(8000, 14)]));
         var found = Rule.Evaluate(new RuleSubject(Anna, days, limits) { Series = new Dictionary<string, QuantitySeries> { ["distance"] = series } }).ToList();

@@ -23,7 +23,7 @@ public sealed class RoomFinderTests
         HardDays = new() { Enabled = false },
     };
 
-    private static readonly RuleLimits Ratio = None with { LoadRatio = new() };
+    private static readonly RuleLimits Ratio = None with { LoadRatio = new() { Raise = 1.8, Return = 1.6, OnDays = 2 } };
 
     /// <summary>Six days of 200 lie before, the 21 before them hold 20 x 100 + 500: usual (2500 / 3) = 833.33, and 1.8 x 833.33 - 1200 = 300.</summary>
     [Fact]
@@ -33,7 +33,7 @@ public sealed class RoomFinderTests
     /// <summary>The week before held 700: 1.4 x 700 - 720 = 260; the median, too, is 700: 1.2 x 700 - 720 = 120 binds less.</summary>
     [Fact]
     public void OfTheJumpItIsTheLargerOfBothLimitsLessTheSixDays() =>
-        Is(260, "weekly_jump", Of(None with { WeeklyJump = new() }, [.. Same(100, 100), 400, .. Same(19, 100), .. Same(6, 120)]));
+        Is(260, "weekly_jump", Of(None with { WeeklyJump = new() { Raise = 0.4, Return = 0.25, UsualFactor = 1.2 } }, [.. Same(100, 100), 400, .. Same(19, 100), .. Same(6, 120)]));
 
     /// <summary>The largest session is 100, and one day held two of 90: 1.4 x 100 = 140.</summary>
     [Fact]
@@ -41,7 +41,7 @@ public sealed class RoomFinderTests
     {
         var days = Days([.. Same(40, 100)], twice: 35);
 
-        Is(140, "session_spike", RoomFinder.Of(Anna, Squad(None with { SessionSpike = new() }), days, PersonPlan.None));
+        Is(140, "session_spike", RoomFinder.Of(Anna, Squad(None with { SessionSpike = new() { LoadNotice = 0.4 } }), days, PersonPlan.None));
     }
 
     /// <summary>Three days of 150 in a row, the median training day is 100: 1.3 x 100 = 130. Without the row it is the largest day.</summary>
@@ -155,7 +155,7 @@ public sealed class RoomFinderTests
     private static IReadOnlyList<string> Raising(double?[] loads, double load, RuleLimits limits)
     {
         var (days, date) = (Days([.. loads, load]), On(loads.Length));
-        var afresh = limits with { WeeklyJump = limits.WeeklyJump with { OnDays = 1 } };
+        var afresh = limits with { LoadRatio = limits.LoadRatio with { OnDays = 1 }, WeeklyJump = limits.WeeklyJump with { OnDays = 1 } };
         return
         [
             .. RuleBook.Evaluate(Subject(days, afresh) with { From = date }, [new LoadRatioRule(), new WeeklyJumpRule(), new SessionSpikeRule(), new MonotonyRule()])

@@ -153,7 +153,7 @@ public sealed class BriefBuilderTests
             Subject("d", "Dot", Over(Silence("d"))));
         Assert.Equal(
             [
-                new BriefLine("Ann", "Load is back within 1.6 times the usual week."),
+                new BriefLine("Ann", "Load is back within 1.8 times the usual week."),
                 new BriefLine("Ben", "Load well above the usual: corrected by a later file."),
                 new BriefLine("Cas", "Heavy or fast leg work is back."),
                 new BriefLine("Dot", "Recordings are coming in again."),

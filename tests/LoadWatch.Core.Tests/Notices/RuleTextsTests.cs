@@ -8,7 +8,7 @@ namespace LoadWatch.Tests.Notices;
 
 public sealed class RuleTextsTests
 {
-    private static readonly RuleLimits Limits = new();
+    private static readonly RuleLimits Limits = new() { LoadRatio = new() { Raise = 1.8, Return = 1.6 } };
 
     [Fact]
     public void EveryRuleHasWordsOfItsOwn()

@@ -9,18 +9,19 @@ internal static class HeartRateChecks
     private static readonly Source Tanaka2001 = new(
         "Tanaka, Monahan and Seals 2001, Age-predicted maximal heart rate revisited, J Am Coll Cardiol 37:153-156", Reading.Read);
 
-    private static readonly Source Nes2013 = new("Nes et al. 2013, Age-predicted maximal heart rate in healthy subjects, Scand J Med Sci Sports 23:697-704", Reading.Read);
+    private static readonly Source Nes2013 = new(
+        "Nes et al. 2013, Age-predicted maximal heart rate in healthy subjects: The HUNT Fitness Study, Scand J Med Sci Sports 23:697-704 (abstract)", Reading.Read);
 
     private static readonly Source Gulati2010 = new(
-        "Gulati et al. 2010, Heart rate response to exercise stress testing in asymptomatic women, Circulation 122:130-137", Reading.Read);
+        "Gulati et al. 2010, Heart rate response to exercise stress testing in asymptomatic women: The St. James Women Take Heart Project, Circulation 122:130-137 (abstract)", Reading.Read);
 
-    private static readonly Source Sydo2014 = new("Sydó et al. 2014, Mayo Clin Proc (abstract)", Reading.Read);
+    private static readonly Source Sydo2014 = new("Sydó et al. 2014, Relationship between exercise heart rate and age in men vs women, Mayo Clin Proc (abstract)", Reading.Read);
 
     private static readonly Source Gellish2007 = new(
         "Gellish et al. 2007, Longitudinal modeling of the relationship between age and maximal heart rate, Med Sci Sports Exerc 39:822-829", Reading.FromMemory);
 
     private static readonly Source Garber2011 = new(
-        "Garber et al. 2011, Quantity and quality of exercise for developing and maintaining fitness, Med Sci Sports Exerc 43:1334-1359", Reading.Read);
+        "Garber et al. 2011, Quantity and quality of exercise for developing and maintaining cardiorespiratory, musculoskeletal, and neuromotor fitness in apparently healthy adults, Med Sci Sports Exerc 43:1334-1359", Reading.Read);
 
     private static readonly Source Acsm = new("American College of Sports Medicine, Guidelines for exercise testing and prescription, example of a target heart rate", Reading.FromMemory);
 

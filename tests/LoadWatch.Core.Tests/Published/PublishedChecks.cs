@@ -11,6 +11,7 @@ public static class PublishedChecks
         .. List(nameof(StimulusChecks), StimulusChecks.Rows),
         .. List(nameof(StrengthChecks), StrengthChecks.Rows),
         .. List(nameof(HeartRateChecks), HeartRateChecks.Rows),
+        .. List(nameof(EffortChecks), EffortChecks.Rows),
         .. List(nameof(LoadChecks), LoadChecks.Rows),
         .. List(nameof(FunctionChecks), FunctionChecks.Rows),
     ];

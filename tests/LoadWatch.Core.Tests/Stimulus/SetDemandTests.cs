@@ -119,6 +119,39 @@ public class SetDemandTests
         Assert.Contains("declared", Assert.Single(region.NotSeen), StringComparison.Ordinal);
     }
 
+    /// <summary>60 % of the maximum; fast from 0.8 m/s on.</summary>
+    [Theory]
+    [InlineData(0.8, false, SetRule.Fast, Grade.B)]
+    [InlineData(0.8, true, SetRule.Fast, Grade.B)]
+    [InlineData(0.79, true, SetRule.LoadAndMaximum, Grade.B)]
+    [InlineData(0.79, false, SetRule.LoadAndMaximum, Grade.B)]
+    [InlineData(null, true, SetRule.Fast, Grade.C)]
+    [InlineData(double.NaN, true, SetRule.Fast, Grade.C)]
+    [InlineData(0.0, true, SetRule.Fast, Grade.C)]
+    public void AMeasuredSpeedGoesBeforeTheDeclaration(double? speed, bool declared, SetRule rule, Grade grade)
+    {
+        var demand = Demand(Given.Set("squat", 5, 60) with { BarSpeedMetresPerSecond = speed, IsFast = declared }, Anchor("fresh"))!;
+
+        Assert.Equal((rule, grade), (demand.Rule, demand.Grade));
+    }
+
+    [Fact]
+    public void AMeasuredSpeedLeavesNothingToSayOfIt()
+    {
+        var measured = Region(Given.Set("squat", 8, 50) with { BarSpeedMetresPerSecond = 1 });
+
+        Assert.Equal((new Band(0, 8, 8), Grade.B), (measured.HardRepetitions, measured.Grade));
+        Assert.Empty(measured.NotSeen);
+    }
+
+    [Fact]
+    public void WhatWasDeclaredFastButMeasuredSlowerSaysSo()
+    {
+        var slow = Region(Given.Set("squat", 8, 50, 2) with { BarSpeedMetresPerSecond = 0.5, IsFast = true });
+
+        Assert.Equal("speed of 1 of 1 sets: declared fast, measured slower: read by the load", Assert.Single(slow.NotSeen));
+    }
+
     /// <summary>0.7 / 1.2 = 0.583 and 0.7 / 0.8 = 0.875; the last 3 s count, all of the slow class from 0.33 on.</summary>
     [Fact]
     public void AHoldIsOneBoutAndOneSetAndNoRepetition()

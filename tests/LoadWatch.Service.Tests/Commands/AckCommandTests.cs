@@ -80,7 +80,7 @@ public sealed class AckCommandTests : IDisposable
     [Fact]
     public void LaterSweepsAndARebuildKeepItAndTheNextBriefAsksForNothingMore()
     {
-        Assert.Contains("- Anna Ahola (notice)", TomorrowsBrief(), StringComparison.Ordinal);
+        Assert.Contains("- Anna Ahola (notice, ", TomorrowsBrief(), StringComparison.Ordinal);
 
         Ack(alert);
         folder.Sweep();
@@ -88,7 +88,7 @@ public sealed class AckCommandTests : IDisposable
         folder.Sweep(WorkingFolder.Now + Duration.FromDays(1));
 
         Assert.Equal(AlertState.Acknowledged, folder.Read((_, session) => session.Alerts.Get(alert)!.State));
-        Assert.DoesNotContain("- Anna Ahola (notice)", TomorrowsBrief(), StringComparison.Ordinal);
+        Assert.DoesNotContain("- Anna Ahola (notice, ", TomorrowsBrief(), StringComparison.Ordinal);
         Assert.Contains("Anna Ahola", TomorrowsBrief(), StringComparison.Ordinal);
     }
 

@@ -28,8 +28,8 @@ public sealed class RulesCommandTests : IDisposable
             Assert.Contains($"\n{rule.Name}: {rule.Record.Says}\n", printed, StringComparison.Ordinal);
             Assert.All(rule.Record.Fields(rule.Name), field => Assert.Contains(field.Text, printed, StringComparison.Ordinal));
         });
-        Assert.Contains("enabled true, quantities [], raise 2.5, return 1.6, history_days 28", printed, StringComparison.Ordinal);
-        Assert.Contains("on_days 1, off_days 1, severity warning", printed, StringComparison.Ordinal);
+        Assert.Contains("enabled true, quantities [], raise 2.5, return 1.8, history_days 28", printed, StringComparison.Ordinal);
+        Assert.Contains("on_days 2, off_days 1, severity warning", printed, StringComparison.Ordinal);
         Assert.Contains("regions [\"legs\"]", printed, StringComparison.Ordinal);
         Assert.Contains("What mutes what:", printed, StringComparison.Ordinal);
         Assert.All(RuleMutes.All, mute => Assert.Contains(mute.How, printed, StringComparison.Ordinal));
@@ -37,7 +37,7 @@ public sealed class RulesCommandTests : IDisposable
 
     [Theory]
     [InlineData("squad", 2.5, 2, true, true)]
-    [InlineData("class", 2.5, 1.6, true, false)]
+    [InlineData("class", 2.5, 1.8, true, false)]
     [InlineData("anna", 2.5, 2, true, true)]
     [InlineData("BEN", 3, 2, false, true)]
     public void ProgramsGetTheLimitsInForce(string whose, double raise, double back, bool silence, bool monotony)

@@ -118,20 +118,20 @@ public sealed class ConfigurationMistakesTests
         Assert.StartsWith(fault, Assert.Single(ConfigurationFolder.FaultsWith("loadwatch.json", json)), StringComparison.Ordinal);
 
     [Theory]
-    [InlineData("""{ "limits": { "load_ratio": { "raise": 1.5 } } }""", "loadwatch.json:1: limits.load_ratio.return: 1.6 is above raise, which is 1.5")]
-    [InlineData("{ \"groups\": [ { \"limits\": {\n\"load_ratio\": { \"return\": 1.9 } } } ] }",
-        "loadwatch.json:2: groups[0].limits.load_ratio.return: 1.9 is above raise, which is 1.8")]
+    [InlineData("""{ "limits": { "load_ratio": { "raise": 1.5 } } }""", "loadwatch.json:1: limits.load_ratio.return: 1.8 is above raise, which is 1.5")]
+    [InlineData("{ \"groups\": [ { \"limits\": {\n\"load_ratio\": { \"return\": 2.3 } } } ] }",
+        "loadwatch.json:2: groups[0].limits.load_ratio.return: 2.3 is above raise, which is 2.2")]
     [InlineData("""{ "limits": { "stimulus_gap": { "notice_days": 15 } } }""",
         "loadwatch.json:1: limits.stimulus_gap.warning_days: 14 is below notice_days, which is 15")]
     [InlineData("""{ "limits": { "silence": { "gaps_wanted": 85 } } }""",
         "loadwatch.json:1: limits.silence.gaps_wanted: 85 gaps never fit in look_back_days, which is 84")]
-    [InlineData("""{ "limits": { "weekly_jump": { "return": 0.5 } } }""", "loadwatch.json:1: limits.weekly_jump.return: 0.5 is above raise, which is 0.4")]
+    [InlineData("""{ "limits": { "weekly_jump": { "return": 0.5 } } }""", "loadwatch.json:1: limits.weekly_jump.return: 0.5 is above raise, which is 0.3")]
     [InlineData("""{ "limits": { "weekly_jump": { "look_back_weeks": 5 } } }""",
         "loadwatch.json:1: limits.weekly_jump.weeks: 6 is above look_back_weeks, which is 5")]
-    [InlineData("""{ "limits": { "session_spike": { "run_notice": 0.4 } } }""",
-        "loadwatch.json:1: limits.session_spike.run_warning: 0.3 is below run_notice, which is 0.4")]
+    [InlineData("""{ "limits": { "session_spike": { "run_notice": 0.7 } } }""",
+        "loadwatch.json:1: limits.session_spike.run_warning: 0.6 is below run_notice, which is 0.7")]
     [InlineData("""{ "limits": { "session_spike": { "load_warning": 0.3 } } }""",
-        "loadwatch.json:1: limits.session_spike.load_warning: 0.3 is below load_notice, which is 0.4")]
+        "loadwatch.json:1: limits.session_spike.load_warning: 0.3 is below load_notice, which is 0.6")]
     [InlineData("""{ "limits": { "monotony": { "return": 2.1 } } }""", "loadwatch.json:1: limits.monotony.return: 2.1 is above raise, which is 2")]
     [InlineData("""{ "limits": { "monotony": { "strains_wanted": 90, "look_back_days": 80 } } }""",
         "loadwatch.json:1: limits.monotony.strains_wanted: 90 is above look_back_days, which is 80")]
@@ -139,17 +139,17 @@ public sealed class ConfigurationMistakesTests
         "loadwatch.json:1: limits.hard_days.training_days_wanted: 40 is above look_back_days, which is 28")]
     [InlineData("""{ "limits": { "hard_days": { "matches": 5, "match_days": 4 } } }""",
         "loadwatch.json:1: limits.hard_days.matches: 5 is above match_days, which is 4")]
-    [InlineData("""{ "limits": { "falling_load": { "warning": 0.65 } } }""", "loadwatch.json:1: limits.falling_load.warning: 0.65 is above notice, which is 0.6")]
-    [InlineData("""{ "limits": { "falling_load": { "return": 0.5 } } }""", "loadwatch.json:1: limits.falling_load.return: 0.5 is below notice, which is 0.6")]
+    [InlineData("""{ "limits": { "falling_load": { "warning": 0.65 } } }""", "loadwatch.json:1: limits.falling_load.warning: 0.65 is above notice, which is 0.55")]
+    [InlineData("""{ "limits": { "falling_load": { "return": 0.5 } } }""", "loadwatch.json:1: limits.falling_load.return: 0.5 is below notice, which is 0.55")]
     [InlineData("""{ "limits": { "falling_load": { "weeks": 5 } } }""", "loadwatch.json:1: limits.falling_load.weeks_wanted: 6 is above weeks, which is 5")]
     public void LimitsThatContradictEachOther(string json, string fault) => Assert.Equal([fault], ConfigurationFolder.FaultsWith("loadwatch.json", json));
 
     [Theory]
-    [InlineData("""{ "limits": { "load_ratio": { "raise": 1.6 } } }""")]
+    [InlineData("""{ "limits": { "load_ratio": { "raise": 1.8 } } }""")]
     [InlineData("""{ "limits": { "stimulus_gap": { "notice_days": 14 } } }""")]
     [InlineData("""{ "limits": { "silence": { "gaps_wanted": 84 } } }""")]
-    [InlineData("""{ "limits": { "falling_load": { "warning": 0.6, "return": 0.6 } } }""")]
-    [InlineData("""{ "limits": { "session_spike": { "enabled": false, "run_warning": 0.1 } } }""")]
+    [InlineData("""{ "limits": { "falling_load": { "warning": 0.55, "return": 0.55 } } }""")]
+    [InlineData("""{ "limits": { "session_spike": { "enabled": false, "run_warning": 0.3 } } }""")]
     public void LimitsThatMeetAreTaken(string json) => Assert.NotNull(ConfigurationFolder.With("loadwatch.json", json));
 
     [Theory]

@@ -20,7 +20,7 @@ public sealed class ConfigurationSchemaTests
     {
         var raise = Schema["properties"]!["limits"]!["properties"]!["load_ratio"]!["properties"]!["raise"]!;
 
-        Assert.Equal((1.0, 10.0, 1.8), ((double)raise["minimum"]!, (double)raise["maximum"]!, (double)raise["default"]!));
+        Assert.Equal((1.0, 10.0, 2.2), ((double)raise["minimum"]!, (double)raise["maximum"]!, (double)raise["default"]!));
         Assert.StartsWith("Raised at this uncoupled ratio or above.", (string)raise["description"]!, StringComparison.Ordinal);
     }
 

@@ -38,7 +38,7 @@ internal sealed class DemoLife
         (this.seed, this.until) = (seed, until);
         people = [.. DemoCast.All.Select(part => DemoPerson.Draw(part, seed, until))];
         groups = DemoCast.All.Select(part => part.Group).Distinct()
-            .ToDictionary(group => group, group => new Group(group, group, DemoCast.LoadOf(group), new RuleLimits()));
+            .ToDictionary(group => group, group => new Group(group, group, DemoCast.LoadOf(group), group == DemoCast.Class ? RuleLimits.OfClinic() : new RuleLimits()));
         subjects = new Subjects(people.ToDictionary(person => person.Person.Id, person => person.Person), groups, DeviceBook.Empty);
         rows = [.. new DemoTables(people, seed, until).Last.SelectMany(table => Rows(table.Path, table.Bytes))];
     }

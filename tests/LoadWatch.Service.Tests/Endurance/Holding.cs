@@ -4,13 +4,12 @@ namespace LoadWatch.Service.Tests.Endurance;
 
 /// <summary>What this process holds after everything that can be collected was.</summary>
 /// <param name="ManagedMegabytes">Live objects.</param>
-/// <param name="WorkingSetMegabytes">Resident memory.</param>
-/// <param name="NativeMegabytes">
-/// Resident memory that the collector does not hold: code, the database engine's caches, threads. The collector takes and gives back regions of 4 MB each, which
-/// tell nothing of a growth and would drown it; what it holds shows in the live objects.
+/// <param name="NativeMegabytes">What native code has taken of the allocator and not given back, the database engine and the drawing library among it; null where the system does not tell.</param>
+/// <param name="WorkingSetMegabytes">
+/// Resident memory: the two above, what the collector and the allocator keep in reserve, compiled code, libraries. The collector takes and gives back regions of 4 MB.
 /// </param>
 /// <param name="Handles">Open files and the like; 0 where the system does not list them.</param>
-public sealed record Holding(int Night, double ManagedMegabytes, double WorkingSetMegabytes, double NativeMegabytes, int Handles, int Threads)
+public sealed record Holding(int Night, double ManagedMegabytes, double? NativeMegabytes, double WorkingSetMegabytes, int Handles, int Threads)
 {
     private const double Mega = 1024 * 1024;
 
@@ -27,8 +26,8 @@ public sealed record Holding(int Night, double ManagedMegabytes, double WorkingS
         return new Holding(
             night,
             live / Mega,
+            NativeHeap.Bytes() / Mega,
             self.WorkingSet64 / Mega,
-            (self.WorkingSet64 - GC.GetGCMemoryInfo().TotalCommittedBytes) / Mega,
             Directory.Exists("/proc/self/fd") ? Directory.GetFileSystemEntries("/proc/self/fd").Length : 0,
             self.Threads.Count);
     }

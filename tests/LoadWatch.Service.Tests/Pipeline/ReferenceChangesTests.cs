@@ -18,7 +18,7 @@ public sealed class ReferenceChangesTests
 {
     private static readonly LocalDate First = new(2026, 1, 5);
     private static readonly Person Anna = new("anna", "Anna", "squad", null, Sex.Male, DateTimeZone.Utc);
-    private static readonly Group Squad = new("squad", "Squad", QuantityNames.BanisterTrimp, new RuleLimits());
+    private static readonly Group Squad = new("squad", "Squad", QuantityNames.BanisterTrimp, new RuleLimits { LoadRatio = new() { Raise = 1.8, Return = 1.6, OnDays = 1 } });
     private static readonly HashSet<string> RulesOfLoad = [.. RuleBook.OfLoad.Select(rule => rule.Name)];
 
     [Theory]
@@ -186,7 +186,7 @@ public sealed class ReferenceChangesTests
     [Fact]
     public void ANoteDoesNotBecomeAnAlertWhenTheChangeLeavesTheWindow()
     {
-        var hard = Squad with { Limits = new RuleLimits { LoadRatio = new() { Raise = 1.8, Return = 0.9 } } };
+        var hard = Squad with { Limits = new RuleLimits { LoadRatio = Squad.Limits.LoadRatio with { Return = 0.9 } } };
         var series = Series([.. Rides(0, 60, 60, 120), .. Rides(60, 75, 35, 160), .. Rides(75, 160, 35, 160)], Book(Max(200), Rest(60), Max(170, 60)), hard);
 
         Assert.Equal(Severity.Note, On(series, "load_ratio", 60 + ReferencePeriods.WindowDays - 1).Severity);

@@ -42,7 +42,7 @@ public sealed class WebhookBriefsTests : IDisposable
 
         var update = Pending().Single(pending => pending.Notice.Reason == NoticeReason.ListChanged);
         Assert.Equal(Posted, update.Delivery);
-        Assert.Contains("- A. (warning)", update.Notice.MailText, StringComparison.Ordinal);
+        Assert.Contains("- A. (warning, new): ", update.Notice.MailText, StringComparison.Ordinal);
         Assert.Null(update.Notice.MailHtml);
     }
 

@@ -59,7 +59,8 @@ internal sealed class WorkingFolder : IDisposable
           "inboxes": [{ "name": "inbox", "path": "inbox", "take": "{{take}}" }],
           "groups": [{ "id": "squad", "name": "Squad" }],
           "contacts": [{ "id": "staff", "name": "Staff", "groups": ["squad"], "brief_at": "05:00" }],
-          "intake": { {{intake}} }
+          "intake": { {{intake}} },
+          "limits": { "silence": { "extra_days": 2 } }
         }
 
         """;

@@ -45,6 +45,7 @@ internal sealed record QuantityRole() : FieldRole(Word)
         QuantityNames.Distance => new(name, Measure.Metres, 0, LargestMetres),
         _ when name.StartsWith(DistanceAbove.Prefix, StringComparison.Ordinal) => new(name, Measure.Metres, 0, LargestMetres),
         QuantityNames.Climb => new(name, Measure.Metres, 0, LargestClimb),
+        QuantityNames.MinutesModerate or QuantityNames.MinutesVigorous => new(name, Measure.Minutes, 0, 1440),
         QuantityNames.SpeedTop => new(name, Measure.MetresPerSecond, 0, LargestSpeed),
         QuantityNames.Work => new(name, Measure.Kilojoules, 0, LargestWork),
         QuantityNames.Kilograms => new(name, Measure.Kilograms, 0, Largest),

@@ -28,6 +28,7 @@ internal sealed class SetsTable : TableKind
         new WordRole("load", Words<SetLoad>.All),
         YesNo.Role("hold"),
         YesNo.Role("fast"),
+        new NumberRole("bar_speed", Measure.MetresPerSecond, 0, 10) { IsAbove = true },
     ];
 
     public override IReadOnlyList<string> Needed => ["exercise"];
@@ -52,7 +53,10 @@ internal sealed class SetsTable : TableKind
             values.Number("seconds"),
             values.Word<SetLoad>("load") ?? LoadOf(kilograms, pin),
             values.IsYes("hold"),
-            values.IsYes("fast")));
+            values.IsYes("fast"))
+        {
+            BarSpeedMetresPerSecond = values.Number("bar_speed"),
+        });
     }
 
     /// <summary>A set has a number of its own; where the table states none, equal rows are counted: three of them are three sets.</summary>

@@ -54,14 +54,16 @@ public class TableKindTests
             TableFiles.Field("x", "exercise"), TableFiles.Field("zeit", "time"), TableFiles.Field("gerät", "machine"), TableFiles.Field("lb", "kilograms", "lb"),
             TableFiles.Field("pin", "pin"), TableFiles.Field("rir", "repetitions_in_reserve"), TableFiles.Field("schwer", "hardness"),
             TableFiles.Field("dauer", "seconds", "m:ss"), TableFiles.Field("art", "load") with { Words = Words(("Gummi", "band"), ("Stecker", "pin")) },
-            TableFiles.Field("gehalten", "hold") with { Words = Words(("ja", "yes"), ("nein", "no")) }, TableFiles.Field("schnell", "fast"));
+            TableFiles.Field("gehalten", "hold") with { Words = Words(("ja", "yes"), ("nein", "no")) }, TableFiles.Field("schnell", "fast"),
+            TableFiles.Field("tempo", "bar_speed", "m/s"));
 
         var row = TableFiles.Contents<SetRow>(
-            "d,x,zeit,gerät,lb,pin,rir,schwer,dauer,art,gehalten,schnell\n2026-10-05,plank,17:05:09,B2,100,4,1.5,8,1:30,GUMMI,Ja,no\n", layout)[0];
+            "d,x,zeit,gerät,lb,pin,rir,schwer,dauer,art,gehalten,schnell,tempo\n2026-10-05,plank,17:05:09,B2,100,4,1.5,8,1:30,GUMMI,Ja,no,0.85\n", layout)[0];
 
         // 100 lb = 45.359237 kg by definition of the pound.
         Assert.Equal(
-            new SetRow(null, new LocalTime(17, 5, 9), "plank", "B2", null, null, 45.359237, 4, 1.5, 8, 90, SetLoad.Band, IsHold: true, IsFast: false), row);
+            new SetRow(null, new LocalTime(17, 5, 9), "plank", "B2", null, null, 45.359237, 4, 1.5, 8, 90, SetLoad.Band, IsHold: true, IsFast: false) { BarSpeedMetresPerSecond = 0.85 },
+            row);
     }
 
     [Theory]
