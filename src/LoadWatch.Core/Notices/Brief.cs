@@ -105,7 +105,11 @@ public sealed record FlaggedReason(
 public sealed record BriefLine(string Subject, string Sentence, bool OfDelivery = false);
 
 /// <summary>One group in a compact table, sorted by name.</summary>
-public sealed record BriefGroup(string Id, string Name, string LoadUnit, IReadOnlyList<BriefRow> Rows);
+public sealed record BriefGroup(string Id, string Name, string LoadUnit, IReadOnlyList<BriefRow> Rows)
+{
+    /// <summary>What no rule looks at, and why, a sentence each: quiet there is not all well.</summary>
+    public IReadOnlyList<string> NotWatched { get; init; } = [];
+}
 
 /// <summary>One person in the group's table. Unknown is null.</summary>
 /// <param name="LastRecorded">Date of the last recording.</param>

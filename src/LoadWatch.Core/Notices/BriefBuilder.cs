@@ -201,18 +201,21 @@ public static class BriefBuilder
     private static DayPlan PlanOf(BriefSubject subject) => subject.Days.Count == 0 ? DayPlan.None : subject.Days[^1].Plan;
 
     private static IReadOnlyList<BriefGroup> Groups(Contact contact, List<BriefSubject> shown, LocalDate upTo, bool self) =>
-        [.. ByGroup(contact, shown).Select(group => Table(group.First().Group, group, upTo, ViewOf(contact, shown), self))];
+        [.. ByGroup(contact, shown).Select(group => Table(group.First().Group, [.. group], upTo, ViewOf(contact, shown), self))];
 
     private static IOrderedEnumerable<IGrouping<string, BriefSubject>> ByGroup(Contact contact, List<BriefSubject> shown) => shown
         .GroupBy(subject => subject.Group.Id, StringComparer.Ordinal)
         .OrderBy(group => Place(contact.Groups, group.Key))
         .ThenBy(group => group.Key, StringComparer.Ordinal);
 
-    private static BriefGroup Table(Group group, IEnumerable<BriefSubject> members, LocalDate upTo, RoleView view, bool self) => new(
+    private static BriefGroup Table(Group group, List<BriefSubject> members, LocalDate upTo, RoleView view, bool self) => new(
         group.Id,
         OneLine.Of(group.Name),
         LoadUnits.Of(group.LoadQuantity),
-        [.. members.Select(member => BriefRows.Of(member, upTo, view, self))]);
+        [.. members.Select(member => BriefRows.Of(member, upTo, view, self))])
+    {
+        NotWatched = UnwatchedLines.Of(members, upTo, view, self),
+    };
 
     private static int Place(IReadOnlyList<string> order, string id)
     {

@@ -19,7 +19,7 @@ internal static class BriefRows
     private const int RemarksShown = 2;
 
     /// <summary>Recorded days from which on, and up to which, a region that no channel sees is told. A choice.</summary>
-    private const int UnseenFrom = 5;
+    internal const int UnseenFrom = 5;
 
     private const int UnseenTo = 10;
 
@@ -124,7 +124,7 @@ internal static class BriefRows
     }
 
     /// <summary>Told while a record is young, then no more: a person with heart rate alone is not reminded of it every morning.</summary>
-    private static bool IsFirstUnseen(BriefSubject subject, Day? today) =>
+    internal static bool IsFirstUnseen(BriefSubject subject, Day? today) =>
         today?.Regions.GetValueOrDefault(BodyRegion.Legs, RegionDay.NotCovered).DaysSince is null
         && subject.Days.Count(day => day.State == DayState.Recorded) is >= UnseenFrom and <= UnseenTo
         && (subject.Days.Count < BriefDays.Usual || subject.Days[0].DaysSinceRecorded is null);

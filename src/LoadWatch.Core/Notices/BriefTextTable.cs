@@ -26,6 +26,11 @@ internal static class BriefTextTable
             {
                 WriteRow(lines, row);
             }
+
+            foreach (var line in group.NotWatched)
+            {
+                lines.Paragraph("  ", OneLine.Sentence(line));
+            }
         }
     }
 

@@ -29,7 +29,7 @@ internal sealed class InitialledBrief
         Returned = [.. brief.Returned.Select(line => line with { Subject = Subject(line.Subject), Sentence = cover.Sentence(line.Sentence) })],
         Changed = [.. brief.Changed.Select(line => line with { Subject = Subject(line.Subject), Sentence = cover.Sentence(line.Sentence) })],
         Questions = [.. brief.Questions.Select(Question)],
-        Groups = [.. brief.Groups.Select(group => group with { Name = cover.Sentence(group.Name), Rows = [.. group.Rows.Select(Row)] })],
+        Groups = [.. brief.Groups.Select(group => group with { Name = cover.Sentence(group.Name), Rows = [.. group.Rows.Select(Row)], NotWatched = [.. group.NotWatched.Select(cover.Sentence)] })],
         Week = brief.Week is { } week ? Week(week) : null,
         Calls = brief.Calls is { } calls ? calls with { Calls = [.. calls.Calls.Select(Call)] } : null,
         Sheets = [.. brief.Sheets.Select(sheet => new ClassSheet(cover.Sentence(sheet.Heading), [.. sheet.People.Select(Planned)]))],

@@ -1,4 +1,5 @@
 using LoadWatch.Delivery.Page;
+using LoadWatch.Delivery.Pictures;
 using LoadWatch.Notices;
 
 namespace LoadWatch.Delivery.Mail;
@@ -13,4 +14,7 @@ public static class MailRenderer
 
     /// <summary>The same brief gives the same bytes, in every culture.</summary>
     public static string Render(Brief brief) => Template.Render(PageModel.Of(brief));
+
+    /// <summary>The same where pictures may not be drawn.</summary>
+    public static string Render(Brief brief, PictureProbe pictures) => Template.Render(PageModel.Of(brief, pictures));
 }

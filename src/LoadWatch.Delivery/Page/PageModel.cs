@@ -1,4 +1,5 @@
 using LoadWatch.Findings;
+using LoadWatch.Delivery.Pictures;
 using LoadWatch.Notices;
 
 namespace LoadWatch.Delivery.Page;
@@ -27,7 +28,10 @@ internal sealed record PageModel(
 
     public PageWeek? Week { get; init; }
 
-    public static PageModel Of(Brief brief)
+    public static PageModel Of(Brief brief) => Of(brief, PictureProbe.OfMachine);
+
+    /// <param name="pictures">Whether there are pictures; asked only where one is wanted.</param>
+    public static PageModel Of(Brief brief, PictureProbe pictures)
     {
         var (headline, lead) = Split(OneLine.Of(brief.FirstLine));
         return new PageModel(
@@ -38,7 +42,7 @@ internal sealed record PageModel(
             OneLine.Of(brief.FirstLine),
             headline,
             lead,
-            [.. brief.Flagged.Select(PagePerson.Of)],
+            [.. brief.Flagged.Select(person => PagePerson.Of(person, pictures))],
             brief.FlaggedBeyond > 0 ? BriefText.Beyond(brief.FlaggedBeyond) : null,
             [.. brief.Returned.Select(Clean)],
             [.. brief.Changed.Select(Clean)],
@@ -67,23 +71,30 @@ internal sealed record PageModel(
 /// <param name="Since"><c>new</c>, or since when; may be empty.</param>
 internal sealed record PagePerson(string Name, string Severity, string Since, string What, string Consider, string Decides, PagePicture? Picture)
 {
-    public static PagePerson Of(FlaggedPerson person) => new(
+    /// <summary>What a picture would say, where none can be drawn.</summary>
+    public string? PictureWords { get; init; }
+
+    public static PagePerson Of(FlaggedPerson person, PictureProbe pictures) => new(
         OneLine.Of(person.Name),
         BriefText.SeverityWord(person.Severity),
         person.Since,
         OneLine.Of(person.What),
         OneLine.Of(person.Consider),
         OneLine.Of(person.Decides),
-        person.Picture is { } picture ? new PagePicture(picture) : null);
+        person.Picture is { } picture && pictures.CanDraw ? new PagePicture(picture) : null)
+    {
+        PictureWords = person.Picture is { } told && !pictures.CanDraw ? OneLine.Of(told.Words) : null,
+    };
 }
 
-internal sealed record PageGroup(string Name, string Unit, string People, IReadOnlyList<PageRow> Rows)
+internal sealed record PageGroup(string Name, string Unit, string People, IReadOnlyList<PageRow> Rows, IReadOnlyList<string> NotWatched)
 {
     public static PageGroup Of(BriefGroup group) => new(
         OneLine.Of(group.Name),
         OneLine.Of(group.LoadUnit),
         group.Rows.Count == 1 ? "1 person" : $"{group.Rows.Count} people",
-        [.. group.Rows.Select(row => PageRow.Of(row, group.LoadUnit))]);
+        [.. group.Rows.Select(row => PageRow.Of(row, group.LoadUnit))],
+        [.. group.NotWatched.Select(OneLine.Sentence)]);
 }
 
 /// <summary>One row of a table; a number that is unknown is null, and the template says so.</summary>

@@ -1,3 +1,4 @@
+using LoadWatch.Delivery.Pictures;
 using LoadWatch.Notices;
 
 namespace LoadWatch.Delivery.Page;
@@ -9,4 +10,7 @@ public static class PageRenderer
 
     /// <summary>The same brief gives the same bytes, in every culture.</summary>
     public static string Render(Brief brief) => Template.Render(PageModel.Of(brief));
+
+    /// <summary>The same where pictures may not be drawn.</summary>
+    public static string Render(Brief brief, PictureProbe pictures) => Template.Render(PageModel.Of(brief, pictures));
 }

@@ -26,6 +26,9 @@ public static partial class LogMessages
     [LoggerMessage(EventId = 5902, EventName = "DeliveryGivenUp", Level = LogLevel.Error, Message = "A notice was not delivered and is not tried again: {Delivery}")]
     public static partial void DeliveryGivenUp(ILogger logger, string delivery);
 
+    [LoggerMessage(EventId = 5903, EventName = "PicturesMissing", Level = LogLevel.Warning, Message = "Briefs have no pictures, their words stand alone: the drawing library cannot be loaded: {Reason}")]
+    public static partial void PicturesMissing(ILogger logger, string reason);
+
     [LoggerMessage(EventId = 9001, EventName = "ServiceStarted", Level = LogLevel.Information, Message = "LoadWatch {Version} started: {People} people, {Inboxes} inboxes, {Contacts} contacts, time zone data {TzData}")]
     public static partial void ServiceStarted(ILogger logger, string version, int people, int inboxes, int contacts, string tzData);
 

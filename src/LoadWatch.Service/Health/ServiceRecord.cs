@@ -25,9 +25,21 @@ public sealed class ServiceRecord(Instant? started)
     private HashSet<string> away = [];
     private Dictionary<string, Instant> awaySince = [];
     private int failures;
+    private bool isWithoutPictures;
 
     /// <summary>Sweeps that ended well.</summary>
     public int Sweeps { get; private set; }
+
+    /// <summary>True once in the life of the process.</summary>
+    public bool IsFirstWithoutPictures()
+    {
+        lock (guard)
+        {
+            var isFirst = !isWithoutPictures;
+            isWithoutPictures = true;
+            return isFirst;
+        }
+    }
 
     public void Began(Instant now)
     {

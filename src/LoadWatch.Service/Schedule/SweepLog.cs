@@ -1,3 +1,4 @@
+using LoadWatch.Delivery.Pictures;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Health;
 using LoadWatch.Service.Pipeline;
@@ -26,6 +27,10 @@ internal static class SweepLog
         WriteInboxes(log, state, report);
         report.Undelivered.ForEach(undelivered => LogMessages.DeliveryFailed(log, OneLine.Of(undelivered)));
         report.GivenUp.ForEach(given => LogMessages.DeliveryGivenUp(log, OneLine.Of(given)));
+        if (PictureProbe.OfMachine.KnownTrouble is { } trouble && state.IsFirstWithoutPictures())
+        {
+            LogMessages.PicturesMissing(log, trouble);
+        }
     }
 
     private static void WriteInboxes(ILogger log, ServiceRecord state, SweepReport report)
