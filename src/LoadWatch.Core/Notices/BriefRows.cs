@@ -115,7 +115,7 @@ internal static class BriefRows
         }
 
         var since = upTo;
-        while (days.GetValueOrDefault(since.PlusDays(-1))?.Plan.Absence == absence)
+        while (view.TellsTheSame(days.GetValueOrDefault(since.PlusDays(-1))?.Plan.Absence, absence))
         {
             since = since.PlusDays(-1);
         }
@@ -153,9 +153,15 @@ internal static class BriefRows
             yield return $"not watched for now by plan or answers: {RuleTexts.Named(news.Alert.Key, self: false)}";
         }
 
-        foreach (var finding in subject.Suppressed.Where(finding => !subject.Alerts.Any(news => news.Alert.Key == finding.Key)).OrderBy(finding => RuleTexts.Order(finding.Rule)).Take(RemarksShown))
+        var suppressed = subject.Suppressed.Where(finding => !subject.Alerts.Any(news => news.Alert.Key == finding.Key)).OrderBy(finding => RuleTexts.Order(finding.Rule)).ToList();
+        foreach (var finding in suppressed.Take(RemarksShown))
         {
             yield return RuleTexts.Quiet(finding.Key, QuietReason.SuppressedByPlan, today?.Plan ?? DayPlan.None, self: false);
+        }
+
+        if (suppressed.Count > RemarksShown)
+        {
+            yield return $"{suppressed.Count - RemarksShown} more not watched for now, explain tells";
         }
 
         if (PersonNotes.LastRecorded(subject) is null)

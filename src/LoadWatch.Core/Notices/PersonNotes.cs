@@ -33,7 +33,7 @@ internal static class PersonNotes
             return null;
         }
 
-        var since = subject.Days.Where(day => day.Date <= date).Reverse().TakeWhile(day => day.Plan.Absence == absence).LastOrDefault()?.Date;
+        var since = subject.Days.Where(day => day.Date <= date).Reverse().TakeWhile(day => view.TellsTheSame(day.Plan.Absence, absence)).LastOrDefault()?.Date;
         return since is { } from ? $"{view.Word(absence)} since {Long(from)}" : view.Word(absence);
     }
 

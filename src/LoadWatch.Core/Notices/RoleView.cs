@@ -32,4 +32,7 @@ public sealed record RoleView
         (true, AbsenceWord.Injured) => "injured",
         _ => "away",
     };
+
+    /// <summary>Whether the reader is told the same of both: where reasons of health are hidden, a change from one to the other is, too.</summary>
+    public bool TellsTheSame(AbsenceWord? one, AbsenceWord other) => one is { } absence && Word(absence) == Word(other);
 }

@@ -358,6 +358,29 @@ public sealed class BriefBuilderTests
         Assert.Equal(expected, Assert.Single(Build(Returning(3, 10, usual: 430) with { Alerts = [over] }).Returned).Sentence);
     }
 
+    /// <summary>Ill from the sixth day back on, injured from the third: whoever is not told of health is not told either that the reason changed.</summary>
+    [Theory]
+    [InlineData(ContactRole.Coach, "away since 23 February")]
+    [InlineData(ContactRole.FrontDesk, "away since 23 February")]
+    [InlineData(ContactRole.Physiotherapist, "injured since 26 February")]
+    public void AnAbsenceBeginsWhereTheReaderSeesItBegin(ContactRole role, string expected)
+    {
+        var subject = Subject("a", "Ann");
+        var days = subject.Days.Select((day, place) => day with
+        {
+            Plan = (subject.Days.Count - 1 - place) switch
+            {
+                < 3 => DayPlan.None with { Absence = AbsenceWord.Injured },
+                < 6 => DayPlan.None with { Absence = AbsenceWord.Ill },
+                _ => DayPlan.None,
+            },
+        });
+
+        var brief = BriefBuilder.Build(Contact(role), Today, [subject with { Days = [.. days] }], []);
+
+        Assert.StartsWith(expected, brief.Groups[0].Rows[0].Remark, StringComparison.OrdinalIgnoreCase);
+    }
+
     /// <summary>On the last day the return is so many days old; before it lies a break of so many days.</summary>
     private static BriefSubject Returning(int returnDay, int breakDays, double? usual)
     {
