@@ -195,10 +195,10 @@ public sealed partial class PersonDrawingTests
     [GeneratedRegex("<rect[^>]* width=\"4\" height=\"4\"[^>]* fill=\"none\" stroke=\"currentColor\"")]
     private static partial Regex HollowSquares();
 
-    [GeneratedRegex("<path d=\"[^\"]*Z\" fill=\"currentColor\"")]
+    [GeneratedRegex("<path d=\"M[^L\"]*(?:L[^L\"]*){3,4}\" fill=\"currentColor\"")]
     private static partial Regex FilledPaths();
 
-    [GeneratedRegex("<path[^>]* d=\"[^\"]*Z\"[^>]* fill=\"none\"")]
+    [GeneratedRegex("<path[^>]* d=\"M[^L\"]*(?:L[^L\"]*){4}\"[^>]* fill=\"none\"")]
     private static partial Regex HollowDiamonds();
 
     [GeneratedRegex("<path stroke-width=\"2\"")]
