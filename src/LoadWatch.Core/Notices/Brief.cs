@@ -49,6 +49,9 @@ public sealed record Brief
     /// <summary>Nobody of the brief has a known day: quiet is not said.</summary>
     public bool NothingIsKnown { get; init; }
 
+    /// <summary>The first line counts people without a known day in the last week: quiet is not said.</summary>
+    public bool SomeAreUnknown { get; init; }
+
     /// <summary>Ids of everybody whom it may name.</summary>
     public IReadOnlyList<string> People { get; init; } = [];
 }

@@ -53,7 +53,13 @@ public static class BriefBuilder
         }
 
         var week = forms.Contains(BriefForm.Weekly) && upTo is not null ? BriefWeeks.Of(shown, date, last, ByGroup(contact, shown), self) : null;
-        return brief with { Week = week, NothingIsKnown = first.NothingIsKnown, FirstLine = (first with { HasWeek = week is not null }).Write() };
+        return brief with
+        {
+            Week = week,
+            NothingIsKnown = first.NothingIsKnown,
+            SomeAreUnknown = first.SomeAreUnknown,
+            FirstLine = (first with { HasWeek = week is not null }).Write(),
+        };
     }
 
     /// <summary>Ids of those who get a picture: they want more days than others (<see cref="BriefDays.OfPicture"/>).</summary>

@@ -39,6 +39,7 @@ public static class BriefText
             { Questions.Count: > 0 } => "something needs an answer",
             { Sheets.Count: > 0 } => "who is planned today",
             { NothingIsKnown: true } => "nothing is known yet",
+            { SomeAreUnknown: true } => "nothing to act on, some unknown",
             _ => "all quiet",
         };
         return $"Morning brief, {DateInWords(brief.Date)}: {news}";

@@ -43,6 +43,9 @@ internal sealed record FirstLine(IReadOnlyList<BriefSubject> Shown, LocalDate? U
     /// <summary>Nobody has a known day: nothing can be said, and quiet would be wrong (I-6).</summary>
     public bool NothingIsKnown => Shown.Count > 0 && Shown.All(subject => PersonNotes.LastRecorded(subject) is null && subject.Days.All(day => day.Load is null));
 
+    /// <summary>It tells of people without a known day in the last week.</summary>
+    public bool SomeAreUnknown => Flagged is not null && UnseenCount > 0;
+
     private int Asked => Questions.Count(line => !line.OfDelivery);
 
     private string OfFlagged(IReadOnlyList<BriefSubject> flagged) => (Shown.Count, flagged.Count) switch

@@ -43,7 +43,7 @@ internal static class MailTrouble
         {
             (530 or 534 or 535 or 538, _) => ChannelOutcome.TryAgainSlowly($"the server wants another login: {answer}"),
             (>= 500, _) when stage != MailStage.Sending => ChannelOutcome.TryAgain($"the server refused the connection: {answer}"),
-            (552, _) => ChannelOutcome.Failed($"the server refused the message as too large: {answer}"),
+            (552, _) => ChannelOutcome.TryAgainSlowly($"mailbox full or message too large: {answer}"),
             (>= 500, SmtpErrorCode.SenderNotAccepted) => ChannelOutcome.TryAgainSlowly($"the server refused the sender: {answer}"),
             (>= 500, SmtpErrorCode.RecipientNotAccepted) => ChannelOutcome.Failed($"the server refused the recipient: {answer}"),
             (>= 500, _) => ChannelOutcome.Failed($"the server refused the message: {answer}"),

@@ -13,8 +13,10 @@ internal static class WebhookTrouble
         return (int)status switch
         {
             >= 200 and < 300 => ChannelOutcome.Delivered,
-            408 or 429 or >= 500 => ChannelOutcome.TryAgain($"the receiver asked to come back later: {code}"),
-            >= 400 => ChannelOutcome.Failed($"the receiver refused the notice: {code}"),
+            >= 500 => ChannelOutcome.TryAgain($"the receiver asked to come back later: {code}"),
+            400 or 409 or 413 or 415 or 422 => ChannelOutcome.Failed($"the receiver refused the notice: {code}"),
+            408 or 425 or 429 => ChannelOutcome.TryAgainSlowly($"the receiver asked to come back later: {code}"),
+            >= 400 => ChannelOutcome.TryAgainSlowly($"the receiver does not take notices as things stand: {code}"),
             >= 300 => ChannelOutcome.TryAgainSlowly($"the receiver names another address, and no redirect is followed: {code}"),
             _ => ChannelOutcome.TryAgain($"the receiver gave no answer that ends: {code}"),
         };

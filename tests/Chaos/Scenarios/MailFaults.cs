@@ -11,7 +11,7 @@ public static class MailFaults
 {
     private const int ShortDeadline = 10;
 
-    private static readonly string[] Laters = ["421 4.3.2 closing", "450 4.2.1 greylisted", "451 4.3.0 local trouble", "452 4.3.1 full"];
+    private static readonly string[] Laters = ["421 4.3.2 closing", "450 4.2.1 greylisted", "451 4.3.0 local trouble", "452 4.3.1 full", "552 5.2.2 over quota"];
 
     private static readonly Duration SixDays = Duration.FromDays(6);
 
@@ -20,8 +20,8 @@ public static class MailFaults
         new("mail-away", "F84", "The server is away, then back: kept, then sent once.", Away),
         new("mail-cut", "F85", "The line is cut after the final dot, at one in ten messages: the same Message-ID again, one further copy a cut at most.", Cuts),
         new("mail-killed", "F86", "Killed between the server's 250 and the mark, at every delivery: one further copy a kill at most.", Killed),
-        new("mail-later", "F87 F92", "421, 450, 451 and 452 to the sender, the recipient or the message, and a limit of ten messages: kept, then sent once.", Later),
-        new("mail-refused", "F88", "550, 552 and 554 for one of three recipients: given up and reported, the others served.", Refused),
+        new("mail-later", "F87 F92", "421, 450, 451, 452 and 552 to the sender, the recipient or the message, and a limit of ten messages: kept, then sent once.", Later),
+        new("mail-refused", "F88", "550, 553 and 554 for one of three recipients: given up and reported, the others served.", Refused),
         new("mail-stripped", "F89", "STARTTLS stripped, a certificate out of date, for another host, of a strange authority: nothing sent, then sent once.", Distrusted),
         new("mail-login", "F90", "The login is refused until the password's file is put right: kept, the new password read, sent once.", Login),
         new("mail-slow", "F91", "Answers byte by byte and a greeting without end: one deadline for all of it, then sent once. Silence after the final dot: one further copy.", Slow),
@@ -112,7 +112,7 @@ public static class MailFaults
     private static void Refused(Trial trial)
     {
         using var desk = MailDesk.Open(trial, contacts: 3);
-        foreach (var answer in new[] { "550 5.1.1 no such user", "552 5.3.4 too large", "554 5.7.1 refused" })
+        foreach (var answer in new[] { "550 5.1.1 no such user", "553 5.1.3 no such name", "554 5.7.1 refused" })
         {
             desk.Server.Script = new SmtpScript { ToRecipient = address => address == PlaceOptions.Address(1) ? answer : null };
             using var place = desk.Night();

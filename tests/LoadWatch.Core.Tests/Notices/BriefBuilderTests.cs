@@ -73,6 +73,24 @@ public sealed class BriefBuilderTests
     }
 
     [Fact]
+    public void TheSubjectCallsNothingQuietWhereTheFirstLineNamesUnknownPeople()
+    {
+        var unknown = Subject("b", "Ben") with { Days = Trends("b", 60, back => back < 7 ? null : 80, _ => null) };
+        Assert.Equal("Morning brief, Sunday 1 March 2026: nothing to act on, some unknown", BriefText.Subject(Build(Subject("a", "Ann"), unknown)));
+        Assert.Equal("Morning brief, Sunday 1 March 2026: nothing to act on, some unknown", BriefText.Subject(BriefBuilder.Build(Oneself("b"), Today, [unknown], [])));
+        var known = Subject("b", "Ben") with { Days = Trends("b", 60, back => back == 6 ? 80 : null, _ => null) };
+        Assert.Equal("Morning brief, Sunday 1 March 2026: all quiet", BriefText.Subject(Build(Subject("a", "Ann"), known)));
+    }
+
+    [Fact]
+    public void WhatIsToBeDoneComesBeforeWhatIsUnknownInTheSubject()
+    {
+        var unknown = Subject("b", "Ben") with { Days = Trends("b", 60, back => back < 7 ? null : 80, _ => null) };
+        var asked = BriefBuilder.Build(Contact(ContactRole.Coach), Today, [Subject("a", "Ann"), unknown], [new BriefLine("x.fit", "whose?")]);
+        Assert.Equal("Morning brief, Sunday 1 March 2026: something needs an answer", BriefText.Subject(asked));
+    }
+
+    [Fact]
     public void TheFirstLineHoldsNoName()
     {
         var brief = SquadBrief();

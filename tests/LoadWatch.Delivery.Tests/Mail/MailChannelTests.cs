@@ -162,7 +162,7 @@ public sealed class MailChannelTests : IDisposable
     [InlineData(451, ChannelResult.TryAgain)]
     [InlineData(452, ChannelResult.TryAgain)]
     [InlineData(550, ChannelResult.Failed)]
-    [InlineData(552, ChannelResult.Failed)]
+    [InlineData(552, ChannelResult.TryAgainSlowly)]
     [InlineData(554, ChannelResult.Failed)]
     public async Task TheAnswerToTheMessageDecides(int code, ChannelResult expected)
     {
@@ -172,6 +172,15 @@ public sealed class MailChannelTests : IDisposable
 
         Assert.Equal(expected, outcome.Result);
         Assert.Contains($"{code} as the test wants it", outcome.Reason, StringComparison.Ordinal);
+    }
+
+    // RFC 5321, section 4.2.3: 552 is exceeded storage allocation; 5.2.2 and 5.3.4 (RFC 3463) may follow, or nothing.
+    [Fact]
+    public async Task AFullMailboxIsKeptSinceItsOwnerMayEmptyIt()
+    {
+        await using var server = await MailServer.Start(certificate, _ => new SmtpResponse((SmtpReplyCode)552, "5.2.2 over quota"));
+
+        Assert.Equal(ChannelOutcome.TryAgainSlowly("mailbox full or message too large: 552 5.2.2 over quota"), Send(server));
     }
 
     [Fact]
@@ -198,11 +207,14 @@ public sealed class MailChannelTests : IDisposable
     }
 
     [Fact]
-    public async Task AMessageTooLargeForTheServerFails()
+    public async Task AMessageTooLargeForTheServerHasTheAnswerOfAFullMailboxAndIsKeptAsWell()
     {
         await using var server = await MailServer.Start(certificate, largest: 300);
 
-        Assert.Equal(ChannelResult.Failed, Send(server).Result);
+        var outcome = Send(server);
+
+        Assert.Equal(ChannelResult.TryAgainSlowly, outcome.Result);
+        Assert.StartsWith("mailbox full or message too large: 552", outcome.Reason, StringComparison.Ordinal);
     }
 
     // RFC 1047 (Partridge, 1988): the sender cannot know, so the copy carries the same name.

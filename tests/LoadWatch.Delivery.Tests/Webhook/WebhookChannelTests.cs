@@ -85,14 +85,23 @@ public sealed class WebhookChannelTests
     [InlineData(200, ChannelResult.Delivered)]
     [InlineData(202, ChannelResult.Delivered)]
     [InlineData(299, ChannelResult.Delivered)]
-    [InlineData(408, ChannelResult.TryAgain)]
-    [InlineData(429, ChannelResult.TryAgain)]
     [InlineData(500, ChannelResult.TryAgain)]
     [InlineData(503, ChannelResult.TryAgain)]
     [InlineData(400, ChannelResult.Failed)]
-    [InlineData(401, ChannelResult.Failed)]
-    [InlineData(404, ChannelResult.Failed)]
-    [InlineData(410, ChannelResult.Failed)]
+    [InlineData(409, ChannelResult.Failed)]
+    [InlineData(413, ChannelResult.Failed)]
+    [InlineData(415, ChannelResult.Failed)]
+    [InlineData(422, ChannelResult.Failed)]
+    [InlineData(401, ChannelResult.TryAgainSlowly)]
+    [InlineData(403, ChannelResult.TryAgainSlowly)]
+    [InlineData(404, ChannelResult.TryAgainSlowly)]
+    [InlineData(405, ChannelResult.TryAgainSlowly)]
+    [InlineData(407, ChannelResult.TryAgainSlowly)]
+    [InlineData(408, ChannelResult.TryAgainSlowly)]
+    [InlineData(410, ChannelResult.TryAgainSlowly)]
+    [InlineData(425, ChannelResult.TryAgainSlowly)]
+    [InlineData(429, ChannelResult.TryAgainSlowly)]
+    [InlineData(499, ChannelResult.TryAgainSlowly)]
     [InlineData(301, ChannelResult.TryAgainSlowly)]
     [InlineData(307, ChannelResult.TryAgainSlowly)]
     public void TheAnswerDecides(int status, ChannelResult expected)
@@ -100,6 +109,17 @@ public sealed class WebhookChannelTests
         using var receiver = new Receiver(_ => $"HTTP/1.1 {status} Word\r\nContent-Length: 0\r\nConnection: close\r\n\r\n");
 
         Assert.Equal(expected, Channel(receiver.Address).Deliver(Notice, "ada").Result);
+    }
+
+    [Theory]
+    [InlineData(401, "the receiver does not take notices as things stand: 401")]
+    [InlineData(429, "the receiver asked to come back later: 429")]
+    [InlineData(422, "the receiver refused the notice: 422")]
+    public void TheReasonTellsTheWayFromTheNotice(int status, string expected)
+    {
+        using var receiver = new Receiver(_ => $"HTTP/1.1 {status} Word\r\nContent-Length: 0\r\nConnection: close\r\n\r\n");
+
+        Assert.Equal(expected, Channel(receiver.Address).Deliver(Notice, "ada").Reason);
     }
 
     [Fact]
