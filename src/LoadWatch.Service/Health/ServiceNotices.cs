@@ -21,7 +21,7 @@ public sealed class ServiceNotices(WorkingConfiguration configuration, Instant n
     {
         if (store.Write(session => Decide(session, status)) > 0)
         {
-            new Deliveries(store, Deliveries.Channels(configuration), report).Run(now);
+            new Deliveries(store, configuration, report).Run(now);
         }
     }
 

@@ -12,8 +12,17 @@ using NodaTime;
 namespace LoadWatch.Service.Pipeline;
 
 /// <summary>Sends what was decided and is due, and writes down "sent" only after the channel took it (I-7).</summary>
-public sealed class Deliveries(Store store, IReadOnlyList<INoticeChannel> channels, SweepReport report)
+/// <param name="mailboxes">Mail addresses as configured now, by whose they are: a mail decided for another one is withdrawn.</param>
+public sealed class Deliveries(Store store, IReadOnlyList<INoticeChannel> channels, ILookup<string, string> mailboxes, SweepReport report)
 {
+    private const string Mail = "mail";
+    private const string Withdrawn = "its reader no longer has the address that it was decided for";
+
+    public Deliveries(Store store, WorkingConfiguration configuration, SweepReport report)
+        : this(store, Channels(configuration), Mailboxes.Of(configuration), report)
+    {
+    }
+
     /// <summary>The channels of a configuration, those on disk first: they answer at once.</summary>
     public static IReadOnlyList<INoticeChannel> Channels(WorkingConfiguration configuration)
     {
@@ -36,13 +45,25 @@ public sealed class Deliveries(Store store, IReadOnlyList<INoticeChannel> channe
         var due = store.Read(session => session.Notices.DueDeliveries(now));
         foreach (var pending in due.OrderBy(pending => Place(pending.Delivery.Channel)))
         {
-            Settle(pending, Attempt(pending), now);
+            if (IsWanted(pending))
+            {
+                Settle(pending, Attempt(pending), now);
+            }
+            else
+            {
+                GiveUp(pending, Withdrawn, DeliveryState.Withdrawn, now);
+            }
+
             report.Advanced();
         }
     }
 
     /// <summary>In the channels' order; one that is no longer configured comes first, it takes no time.</summary>
     private int Place(string channel) => channels.ToList().FindIndex(known => known.Name == channel);
+
+    /// <summary>An address that was mistyped or taken away since gets nothing more. The other channels go by the contact's id.</summary>
+    private bool IsWanted(PendingDelivery pending) =>
+        pending.Delivery.Channel != Mail || mailboxes[pending.Notice.ContactId].Contains(pending.Delivery.Recipient, StringComparer.OrdinalIgnoreCase);
 
     private ChannelOutcome Attempt(PendingDelivery pending)
     {
@@ -63,7 +84,7 @@ public sealed class Deliveries(Store store, IReadOnlyList<INoticeChannel> channe
         if (outcome.Result == ChannelResult.Delivered)
         {
             store.Write(session => session.Notices.MarkDelivered(key, way));
-            report.MailsDelivered += way.Channel == "mail" ? 1 : 0;
+            report.MailsDelivered += way.Channel == Mail ? 1 : 0;
         }
         else if (Next(pending, outcome.Result, now) is { } next)
         {
@@ -72,10 +93,15 @@ public sealed class Deliveries(Store store, IReadOnlyList<INoticeChannel> channe
         }
         else
         {
-            var state = outcome.Result == ChannelResult.Failed ? DeliveryState.Failed : DeliveryState.Expired;
-            store.Write(session => session.Notices.MarkGivenUp(key, way, outcome.Reason, state, now));
-            report.GivenUp.Add($"{way.Channel} of {key}: {outcome.Reason}");
+            GiveUp(pending, outcome.Reason, outcome.Result == ChannelResult.Failed ? DeliveryState.Failed : DeliveryState.Expired, now);
         }
+    }
+
+    private void GiveUp(PendingDelivery pending, string reason, DeliveryState state, Instant now)
+    {
+        var (key, way) = (pending.Notice.Key, pending.Delivery);
+        store.Write(session => session.Notices.MarkGivenUp(key, way, reason, state, now));
+        report.GivenUp.Add($"{way.Channel} of {key}: {reason}");
     }
 
     /// <summary>Null when it is not tried again.</summary>

@@ -12,11 +12,12 @@ public static class MissedNotices
 {
     private static readonly Duration Overdue = Duration.FromDays(1);
 
-    /// <summary>Those of whoever is still told anything.</summary>
+    /// <summary>Those of whoever is still told anything; mail of whoever still has an address, else nothing would ever end it.</summary>
     public static IEnumerable<MissedDelivery> All(StoreSession session, WorkingConfiguration configuration)
     {
         var told = configuration.Contacts.Select(contact => contact.Id).Concat(configuration.Administrators.Select(administrator => administrator.Id)).ToHashSet(StringComparer.Ordinal);
-        return session.Notices.MissedDeliveries().Where(missed => told.Contains(missed.Contact));
+        var mailboxes = Mailboxes.Of(configuration);
+        return session.Notices.MissedDeliveries().Where(missed => told.Contains(missed.Contact) && (missed.Channel != "mail" || mailboxes.Contains(missed.Contact)));
     }
 
     /// <summary>Those given up, and those that have been tried for a day or longer. A way that the contact no longer has is left out.</summary>
@@ -33,6 +34,7 @@ public static class MissedNotices
         {
             DeliveryState.Expired => ", given up after five days",
             DeliveryState.Failed => ", refused for good",
+            DeliveryState.Withdrawn => ", withdrawn",
             _ => ", still tried",
         };
         return $"not delivered since {BriefText.DateInWords(missed.Date)}{end}: {missed.Error}";

@@ -173,7 +173,7 @@ public sealed class Sweep
 
         new DayUpdate(configuration, store, now, Report).Run(cancel, new Evaluation(configuration, answers, briefs, now, Report).Run);
         KillPoint.Pass("evaluated");
-        new Deliveries(store, Deliveries.Channels(configuration), Report).Run(now);
+        new Deliveries(store, configuration, Report).Run(now);
         Report.Missed = store.Read(session => MissedNotices.All(session, configuration).Count());
         new Pages(configuration, store, briefs, Report).Rewrite(now, all: !PagesAreCurrent || isNewConfiguration || Report.HasNews);
         PagesAreWritten = true;

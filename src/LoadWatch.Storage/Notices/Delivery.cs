@@ -21,6 +21,9 @@ public enum DeliveryState
 
     /// <summary>Given up after days of trying.</summary>
     Expired,
+
+    /// <summary>Its recipient was one no longer.</summary>
+    Withdrawn,
 }
 
 /// <summary>A delivery that no channel has confirmed yet.</summary>

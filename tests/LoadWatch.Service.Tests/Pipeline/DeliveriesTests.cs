@@ -16,6 +16,7 @@ public sealed class DeliveriesTests : IDisposable
 
     private readonly DirectoryInfo temporary = Directory.CreateTempSubdirectory("loadwatch-deliveries-");
     private readonly Store store;
+    private ILookup<string, string> mailboxes = new[] { Ada, Ben }.ToLookup(_ => "staff");
 
     public DeliveriesTests() => store = Store.Open(DataFolder.Open(Path.Combine(temporary.FullName, "data")));
 
@@ -94,6 +95,48 @@ public sealed class DeliveriesTests : IDisposable
     }
 
     [Fact]
+    public void AMailThatWaitsIsWithdrawnFromAnAddressThatIsTheContactsNoLonger()
+    {
+        Decide(1, Ada, Ben);
+        Run(Start, new ScriptedChannel("mail", _ => ChannelOutcome.TryAgain("no route")));
+        var channel = new ScriptedChannel("mail", _ => ChannelOutcome.Delivered);
+        mailboxes = new[] { "BEN@example.org", "new@example.org" }.ToLookup(_ => "staff");
+
+        var report = Run(Start + Duration.FromHours(1), channel);
+
+        Assert.Equal([("staff|brief|2026-03-01", Ben)], channel.Attempts);
+        Assert.Equal(["mail of staff|brief|2026-03-01: its reader no longer has the address that it was decided for"], report.GivenUp);
+        Assert.Empty(Pending());
+    }
+
+    [Fact]
+    public void AMailIsWithdrawnWhenItsContactIsGoneThoughAnotherHasTheAddress()
+    {
+        Decide(1, Ada);
+        var channel = new ScriptedChannel("mail", _ => ChannelOutcome.Delivered);
+        mailboxes = new[] { Ada }.ToLookup(_ => "another");
+
+        Run(Start, channel);
+
+        Assert.Empty(channel.Attempts);
+        var missed = Assert.Single(Missed());
+        Assert.Equal(DeliveryState.Withdrawn, missed.State);
+        Assert.Equal(
+            "not delivered since Sunday 1 March 2026, withdrawn: its reader no longer has the address that it was decided for", MissedNotices.Sentence(missed));
+    }
+
+    [Fact]
+    public void PageAndNoticeFileAreWrittenWhateverTheMailAddress()
+    {
+        Decide(1, new Storage.Notices.Delivery("page", "staff"), new Storage.Notices.Delivery("log", "staff"));
+        mailboxes = Array.Empty<string>().ToLookup(_ => "");
+
+        Run(Start, new ScriptedChannel("page", _ => ChannelOutcome.Delivered), new ScriptedChannel("log", _ => ChannelOutcome.Delivered));
+
+        Assert.Empty(Pending());
+    }
+
+    [Fact]
     public void ChannelsOnDiskComeBeforeMail()
     {
         Decide(1, new Storage.Notices.Delivery("mail", Ada), new Storage.Notices.Delivery("page", "staff"));
@@ -145,7 +188,7 @@ public sealed class DeliveriesTests : IDisposable
     private SweepReport Run(Instant now, params INoticeChannel[] channels)
     {
         var report = new SweepReport();
-        new Deliveries(store, channels, report).Run(now);
+        new Deliveries(store, channels, mailboxes, report).Run(now);
         return report;
     }
 

@@ -145,6 +145,7 @@ public sealed class MailBriefsTests : IDisposable
     [Theory]
     [InlineData(DeliveryState.Failed, "refused for good")]
     [InlineData(DeliveryState.Expired, "given up after five days")]
+    [InlineData(DeliveryState.Withdrawn, "withdrawn")]
     public void ANoticeThatDidNotGetThroughStandsInTheNextBriefUntilOneDoes(DeliveryState state, string expected)
     {
         Decide(Morning);

@@ -25,6 +25,30 @@ public sealed class MissedNoticesTests : IDisposable
         Assert.Equal(["staff"], All(store).Select(missed => missed.Contact));
     }
 
+    [Fact]
+    public void MailOfAContactWhoHasNoAddressAnyMoreIsNoTrouble()
+    {
+        using var quiet = new MailWorkplace(address: "");
+        using var store = Store.Open(DataFolder.Open(place.At("data")));
+        Miss(store, "staff");
+
+        Assert.Empty(store.Read(session => MissedNotices.All(session, quiet.Read()).ToList()));
+    }
+
+    [Fact]
+    public void TheAddressesAreThoseOfContactsAndAdministrators()
+    {
+        File.WriteAllText(
+            place.At("loadwatch.json"),
+            $$"""{ "time_zone": "UTC", "contacts": [ { "id": "staff", "mail": "ada@example.org" }, { "id": "desk" } ], "administrators": [ { "id": "root", "mail": "root@example.org" } ], "mail": { {{MailWorkplace.Sound}} } }""");
+
+        var mailboxes = Mailboxes.Of(place.Read());
+
+        Assert.Equal(["ada@example.org"], mailboxes["staff"]);
+        Assert.Equal(["root@example.org"], mailboxes["root"]);
+        Assert.Empty(mailboxes["desk"]);
+    }
+
     private List<MissedDelivery> All(Store store) => store.Read(session => MissedNotices.All(session, place.Read()).ToList());
 
     private static void Miss(Store store, string contact)

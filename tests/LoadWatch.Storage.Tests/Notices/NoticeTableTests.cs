@@ -88,6 +88,7 @@ public sealed class NoticeTableTests(SharedFolder shared) : StoreTest(shared)
     [Theory]
     [InlineData(DeliveryState.Failed)]
     [InlineData(DeliveryState.Expired)]
+    [InlineData(DeliveryState.Withdrawn)]
     public void AGivenUpDeliveryIsNeverDueAndStaysOnRecord(DeliveryState state)
     {
         var notice = Some.Notice("coach", Some.Date);
