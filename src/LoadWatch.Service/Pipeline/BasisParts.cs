@@ -86,7 +86,7 @@ public static class BasisParts
             new(person.Id, HeartRate, person.HeartRateInvalid.ToString()),
             new(person.Id, Anchors, string.Join('\n', configuration.Anchors.Of(person.Id).Select(Line).Order(StringComparer.Ordinal))),
             new(person.Id, Group, Hash(new { person.Group, Names = GroupNames(configuration) })),
-            new(person.Id, Rules, Hash(new { person.Name, group.LoadQuantity, group.LoadFallbacks, group.Limits, LoadCalendar.Version })),
+            new(person.Id, Rules, Hash(new { person.Name, group.LoadQuantity, group.LoadFallbacks, group.Deviation, group.Limits, LoadCalendar.Version })),
         ];
     }
 

@@ -27,7 +27,7 @@ public sealed class BasisPartsTests
 
     [Fact]
     public void EveryPropertyOfAGroupIsInAPart() =>
-        Assert.Equal(Sorted(["Id", "Name", "LoadQuantity", "Limits", "LoadFallbacks", "DayBeginsAt"]), Properties(typeof(Group)));
+        Assert.Equal(Sorted(["Id", "Name", "LoadQuantity", "Limits", "LoadFallbacks", "Deviation", "DayBeginsAt"]), Properties(typeof(Group)));
 
     [Fact]
     public void EveryPropertyOfAnAnchorIsInItsLine() =>
