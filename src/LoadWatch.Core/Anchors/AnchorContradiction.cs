@@ -1,3 +1,4 @@
+using System.Globalization;
 using LoadWatch.Loads;
 using LoadWatch.People;
 using NodaTime;
@@ -40,9 +41,12 @@ public sealed record AnchorContradiction(ObservedAnchor Observed, Anchor Measure
             };
             var measured = Measured.Date is { } date ? FormattableString.Invariant($"measured on {date:yyyy-MM-dd}") : "measured";
             return FormattableString.Invariant(
-                $"{ReferenceWords.Of(Observed.Kind)}{of}: {Measured.Value:0.##} {unit} {measured}, own sessions up to {Observed.ShownOn:yyyy-MM-dd} show {Observed.Value:0.##} (within {Observed.Error:0.##}): the measured one is used; measure again?");
+                $"{ReferenceWords.Of(Observed.Kind)}{of}: {Measured.Value:0.##} {unit} {measured}, own sessions up to {Observed.ShownOn:yyyy-MM-dd} show {Told(Observed.Value)} {unit} (within {Told(Observed.Error)} {unit}): the measured one is used; measure again?");
         }
     }
+
+    /// <summary>As fine as it can be read: a hundred watts and more to the watt.</summary>
+    private static string Told(double value) => value.ToString(value >= 100 ? "0" : value >= 10 ? "0.#" : "0.##", CultureInfo.InvariantCulture);
 
     private static bool IsBeyond(ObservedAnchor observed, Anchor measured) => observed.Kind switch
     {
