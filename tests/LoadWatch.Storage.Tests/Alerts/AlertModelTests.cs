@@ -103,7 +103,9 @@ public sealed class AlertModelTests : IDisposable
                     break;
                 case StepKind.NightWithout or StepKind.NightCorrected or StepKind.NightOtherLimits:
                     Night();
-                    suppressed = suppressed && !active;
+
+                    // What stood suppressed was seen to end by nobody, and asks nobody to have seen it.
+                    acked = acked || (active && suppressed);
                     End();
                     break;
                 case StepKind.Acknowledge:
