@@ -79,7 +79,7 @@ public sealed class MonotonyRule : IRule
     }
 
     private static Evidence Basis(EvenWeek read, MonotonyLimits limits, RuleSubject subject) => new(
-        $"monotony = mean / standard deviation ({Over(subject.Deviation)}) of the last 7 days; strain = load of the last 7 days x monotony; the strain against a quantile of the person's "
+        $"monotony = mean / standard deviation ({subject.Deviation.Divisor()}) of the last 7 days; strain = load of the last 7 days x monotony; the strain against a quantile of the person's "
             + "own strains before (nearest rank upward)",
         "Foster 1998, Med Sci Sports Exerc 30:1164-1168; the limit of monotony is a convention, the others a choice",
         [
@@ -97,8 +97,6 @@ public sealed class MonotonyRule : IRule
             new("strains_wanted", limits.StrainsWanted, "days"),
             new("look_back", limits.LookBackDays, "days"),
         ]);
-
-    private static string Over(LoadDeviation deviation) => deviation == LoadDeviation.Sample ? "n - 1" : "n";
 
     /// <summary>What a date shows.</summary>
     private sealed record EvenWeek(LocalDate Date, double Monotony, double Strain, double Acute, double Usual, OwnStrains? Own);

@@ -5,7 +5,9 @@ namespace LoadWatch.Delivery.Mail;
 /// <summary>Notices by mail: one message for each recipient, so that one who is refused keeps nobody else's from leaving.</summary>
 public sealed class MailChannel(MailSettings settings) : INoticeChannel
 {
-    public string Name => "mail";
+    public const string ChannelName = "mail";
+
+    public string Name => ChannelName;
 
     public ChannelOutcome Deliver(Notice notice, string recipient) => Send(notice, recipient).Outcome;
 

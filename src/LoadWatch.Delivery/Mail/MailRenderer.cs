@@ -13,8 +13,6 @@ public static class MailRenderer
     private static readonly LiquidTemplate Template = new("Mail.mail");
 
     /// <summary>The same brief gives the same bytes, in every culture.</summary>
-    public static string Render(Brief brief) => Template.Render(PageModel.Of(brief));
-
-    /// <summary>The same where pictures may not be drawn.</summary>
-    public static string Render(Brief brief, PictureProbe pictures) => Template.Render(PageModel.Of(brief, pictures));
+    /// <param name="pictures">Whether pictures can be drawn; null: as this machine can.</param>
+    public static string Render(Brief brief, PictureProbe? pictures = null) => Template.Render(PageModel.Of(brief, pictures ?? PictureProbe.OfMachine));
 }

@@ -1,5 +1,5 @@
-using LoadWatch.Findings;
 using LoadWatch.Delivery.Pictures;
+using LoadWatch.Findings;
 using LoadWatch.Notices;
 
 namespace LoadWatch.Delivery.Page;
@@ -27,8 +27,6 @@ internal sealed record PageModel(
     public PageCalls? Calls { get; init; }
 
     public PageWeek? Week { get; init; }
-
-    public static PageModel Of(Brief brief) => Of(brief, PictureProbe.OfMachine);
 
     /// <param name="pictures">Whether there are pictures; asked only where one is wanted.</param>
     public static PageModel Of(Brief brief, PictureProbe pictures)

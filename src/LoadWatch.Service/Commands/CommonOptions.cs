@@ -1,5 +1,6 @@
 using System.CommandLine;
 using System.CommandLine.Parsing;
+using LoadWatch.Service.Configuration;
 using NodaTime;
 using NodaTime.Text;
 
@@ -8,8 +9,6 @@ namespace LoadWatch.Service.Commands;
 /// <summary>Options that several commands share.</summary>
 public static class CommonOptions
 {
-    private static readonly LocalTimePattern HourAndMinute = LocalTimePattern.CreateWithInvariantCulture("HH:mm");
-
     public static Option<string> Config() => new("--config", "-c")
     {
         Description = "The configuration file.",
@@ -61,7 +60,7 @@ public static class CommonOptions
 
     private static LocalTime? ParseTimeOfDay(ArgumentResult argument)
     {
-        var parsed = HourAndMinute.Parse(argument.Tokens[0].Value);
+        var parsed = HourAndMinute.Pattern.Parse(argument.Tokens[0].Value);
         if (parsed.Success)
         {
             return parsed.Value;

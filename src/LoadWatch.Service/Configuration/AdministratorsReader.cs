@@ -1,7 +1,6 @@
 using LoadWatch.Delivery.Mail;
 using LoadWatch.People;
 using NodaTime;
-using NodaTime.Text;
 
 namespace LoadWatch.Service.Configuration;
 
@@ -17,7 +16,7 @@ internal static class AdministratorsReader
             administrators.Add(new Administrator(
                 entry.Id,
                 faults.Zone(entry.TimeZone, $"$.administrators[{i}].time_zone") ?? zone,
-                LocalTimePattern.CreateWithInvariantCulture("HH:mm").Parse(entry.ReportAt).Value)
+                HourAndMinute.Pattern.Parse(entry.ReportAt).Value)
             {
                 Mail = entry.Mail.Length > 0 ? entry.Mail : null,
             });

@@ -10,7 +10,6 @@ using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Stimulus;
 using NodaTime;
-using NodaTime.Text;
 
 namespace LoadWatch.Service.Configuration;
 
@@ -149,7 +148,7 @@ public sealed class ConfigurationReader
             var group = new Group(entry.Id, entry.Name.Length > 0 ? entry.Name : entry.Id, entry.LoadQuantity, limits[i])
             {
                 LoadFallbacks = entry.LoadFallbacks,
-                DayBeginsAt = LocalTimePattern.CreateWithInvariantCulture("HH:mm").Parse(entry.DayBeginsAt).Value,
+                DayBeginsAt = HourAndMinute.Pattern.Parse(entry.DayBeginsAt).Value,
                 Deviation = file.Computation.Equations.MonotonyDeviation,
             };
             if (!groups.TryAdd(entry.Id, group))

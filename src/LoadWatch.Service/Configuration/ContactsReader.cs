@@ -1,7 +1,6 @@
 using LoadWatch.Notices;
 using LoadWatch.People;
 using NodaTime;
-using NodaTime.Text;
 
 namespace LoadWatch.Service.Configuration;
 
@@ -38,7 +37,7 @@ internal static class ContactsReader
                 entry.Groups.Count > 0 ? entry.Groups : [.. groups.Keys],
                 entry.People,
                 faults.Zone(entry.TimeZone, $"$.contacts[{i}].time_zone") ?? zone,
-                LocalTimePattern.CreateWithInvariantCulture("HH:mm").Parse(entry.BriefAt).Value,
+                HourAndMinute.Pattern.Parse(entry.BriefAt).Value,
                 entry.BriefDays.ToHashSet())
             {
                 Forms = entry.Forms.Count > 0 ? [.. entry.Forms.Distinct().Order()] : BriefForms.Usual(entry.Role, entry.BriefDays.Distinct().Count()),

@@ -66,15 +66,13 @@ public static class AnchorExplanation
 
     private static void AppendObserved(StringBuilder text, TableBasis basis, Person person, AnchorKind kind, LocalDate on)
     {
-        foreach (var one in basis.ObservedOf(person).Where(one => one.Kind == kind))
+        var observed = basis.ObservedOf(person).Where(one => one.Kind == kind).ToList();
+        foreach (var one in observed)
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"    from own sessions of the 12 months before {Words.Date(one.From)}: {AnchorText.Value(one.Value, kind)} within {AnchorText.Value(one.Error, kind)}, last shown on {Words.Date(one.ShownOn)}: {OneLine.Of(one.Basis)}");
         }
 
-        foreach (var contradiction in AnchorContradiction.On(on, basis.ObservedOf(person).Where(one => one.Kind == kind), basis.StatedOf(person)))
-        {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    {OneLine.Of(contradiction.Words)}");
-        }
+        ReferenceExplanation.AppendContradictions(text, on, observed, basis.StatedOf(person));
     }
 
     private static string RestsOn(AnchorKind kind) => kind switch

@@ -13,12 +13,15 @@ internal static class AnchorText
     /// <summary><c>critical_power (cycling) = 250 W, observed, holds from 2026-06-01: NOTE</c>.</summary>
     public static string Of(Anchor anchor)
     {
-        var of = string.Concat(new[] { anchor.Sport, anchor.Exercise, anchor.Machine }.OfType<string>().Select(word => $" {OneLine.Of(word)}"));
         var since = anchor.Date is { } date ? $"holds from {Words.Date(date)}" : "undated, holds from the beginning";
         var shown = anchor.ShownOn is { } on && on != anchor.Date ? $", last shown on {Words.Date(on)}" : "";
         var note = anchor.Note is { } words ? $": {OneLine.Of(words)}" : "";
-        return $"{AnchorKinds.Of(anchor.Kind).Name}{of} = {Value(anchor.Value, anchor.Kind)}, {Words.Of(anchor.Source)}, {since}{shown}{note}";
+        return $"{Name(anchor.Kind, anchor.Sport, anchor.Exercise, anchor.Machine)} = {Value(anchor.Value, anchor.Kind)}, {Words.Of(anchor.Source)}, {since}{shown}{note}";
     }
+
+    /// <summary>The kind, and what it is of where it is of one sport, exercise or machine: <c>one_repetition_max leg_press</c>.</summary>
+    public static string Name(AnchorKind kind, params IEnumerable<string?> of) =>
+        string.Concat(of.OfType<string>().Select(word => $" {OneLine.Of(word)}").Prepend(AnchorKinds.Of(kind).Name));
 
     /// <summary>With its unit; a pure number has none.</summary>
     public static string Value(double value, AnchorKind kind) =>
@@ -46,7 +49,7 @@ internal static class AnchorText
         HeartRateMaxEquation.Nes => "Nes et al. 2013, Scand J Med Sci Sports 23:697-704",
         HeartRateMaxEquation.Gellish => "Gellish et al. 2007, Med Sci Sports Exerc 39:822-829 (equation from memory)",
         HeartRateMaxEquation.Gulati => "Gulati et al. 2010, Circulation 122:130-137, for women; of others Tanaka et al. 2001",
-        HeartRateMaxEquation.Sydo => "Sydó et al. 2014, Mayo Clin Proc (title not read)",
+        HeartRateMaxEquation.Sydo => "Sydó et al. 2014, Mayo Clin Proc",
         _ => "Tanaka, Monahan and Seals 2001, J Am Coll Cardiol 37:153-156",
     };
 }

@@ -94,7 +94,7 @@ public static class DayExplanation
         Line(text, "ratio, uncoupled = acute / mean week of days 8 to 28 back", day.RatioUncoupled);
         Line(text, "ratio of exponential averages, 7 and 28 days (Williams 2017)", day.RatioEwma);
         Line(text, "change against the week before, fraction", day.WeeklyChange);
-        Line(text, $"monotony = mean / SD ({(group.Deviation == LoadDeviation.Sample ? "n - 1" : "n")}) of 7 days (Foster 1998)", day.Monotony);
+        Line(text, $"monotony = mean / SD ({group.Deviation.Divisor()}) of 7 days (Foster 1998)", day.Monotony);
         Line(text, "strain = week x monotony (Foster 1998)", day.Strain);
         Line(text, "share of 7 days with known load", day.Coverage7);
         Line(text, "share of 28 days with known load", day.Coverage28);

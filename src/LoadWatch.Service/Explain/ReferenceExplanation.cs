@@ -38,13 +38,17 @@ internal static class ReferenceExplanation
         var (observed, stated) = (basis.ObservedOf(person), basis.StatedOf(person));
         foreach (var one in observed.Where(one => one.From <= date).GroupBy(one => one.Of).Select(same => same.MaxBy(one => one.From)!))
         {
-            var of = string.Concat(new[] { one.Sport, one.Exercise, one.Machine }.OfType<string>().Select(word => $" {OneLine.Of(word)}"));
             var use = stated.MeasuredOn(date, one.ToAnchor()) is null ? "used" : "not used, one is measured";
             text.AppendLine(
                 CultureInfo.InvariantCulture,
-                $"    from own sessions {AnchorKinds.Of(one.Kind).Name}{of} = {one.Value:0.###} {AnchorKinds.Of(one.Kind).Unit} (within {one.Error:0.###}) from {Words.Date(one.From)} on, {use}: {OneLine.Of(one.Basis)}");
+                $"    from own sessions {AnchorText.Name(one.Kind, one.Sport, one.Exercise, one.Machine)} = {one.Value:0.###} {AnchorKinds.Of(one.Kind).Unit} (within {one.Error:0.###}) from {Words.Date(one.From)} on, {use}: {OneLine.Of(one.Basis)}");
         }
 
+        AppendContradictions(text, date, observed, stated);
+    }
+
+    public static void AppendContradictions(StringBuilder text, LocalDate date, IEnumerable<ObservedAnchor> observed, AnchorBook stated)
+    {
         foreach (var contradiction in AnchorContradiction.On(date, observed, stated))
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"    {OneLine.Of(contradiction.Words)}");

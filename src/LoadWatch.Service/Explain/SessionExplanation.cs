@@ -265,7 +265,7 @@ public sealed class SessionExplanation
         }
     }
 
-    private static string Name(Anchor anchor) => AnchorKinds.Of(anchor.Kind).Name + string.Concat(new[] { anchor.Exercise, anchor.Machine }.OfType<string>().Select(word => $" {OneLine.Of(word)}"));
+    private static string Name(Anchor anchor) => AnchorText.Name(anchor.Kind, anchor.Exercise, anchor.Machine);
 
     private void Head(string heading) => text.AppendLine(CultureInfo.InvariantCulture, $"  {heading}");
 

@@ -1,3 +1,4 @@
+using LoadWatch.Delivery.Mail;
 using LoadWatch.Notices;
 using LoadWatch.People;
 using LoadWatch.Service.Configuration;
@@ -78,7 +79,7 @@ public sealed class ServiceNotices(WorkingConfiguration configuration, Instant n
         List<Storage.Notices.Delivery> ways = [new("log", administrator.Id)];
         if (configuration.Mail is not null && administrator.Mail is { } address && kind != $"trouble-{MailTrouble}")
         {
-            ways.Add(new Storage.Notices.Delivery("mail", address));
+            ways.Add(new Storage.Notices.Delivery(MailChannel.ChannelName, address));
         }
 
         return ways;

@@ -21,7 +21,6 @@ namespace LoadWatch.Service.Pipeline;
 public sealed class Briefs(WorkingConfiguration configuration, Instant now, IReadOnlyList<BriefLine> unreadable, IReadOnlyList<string> inboxesAway)
 {
     private const int RefusedDays = 7;
-    private const string Mail = "mail";
 
     /// <summary>Freezes every brief that is due, and every update of a changed list, with its deliveries.</summary>
     /// <returns>How many were decided.</returns>
@@ -49,7 +48,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     private bool DecideUpdate(StoreSession session, BriefPeople people, Contact contact)
     {
         var date = now.InZone(contact.Zone).Date;
-        var ways = Ways(contact).Where(way => way.Channel is Mail or WebhookChannel.ChannelName).ToList();
+        var ways = Ways(contact).Where(way => way.Channel is MailChannel.ChannelName or WebhookChannel.ChannelName).ToList();
         if (ways.Count == 0 || !contact.Forms.Contains(BriefForm.Daily) || session.Notices.Get(NoticePolicy.BriefKey(contact, date))?.Flagged is not { } told)
         {
             return false;
@@ -87,7 +86,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         List<Storage.Notices.Delivery> ways = [new("page", contact.Id), new("log", contact.Id)];
         if (IsMailed(contact))
         {
-            ways.Add(new Storage.Notices.Delivery(Mail, contact.Mail!));
+            ways.Add(new Storage.Notices.Delivery(MailChannel.ChannelName, contact.Mail!));
         }
 
         if (configuration.Webhook?.Addresses.ContainsKey(contact.Id) == true)

@@ -15,7 +15,6 @@ namespace LoadWatch.Service.Pipeline;
 /// <param name="mailboxes">Mail addresses as configured now, by whose they are: a mail decided for another one is withdrawn.</param>
 public sealed class Deliveries(Store store, IReadOnlyList<INoticeChannel> channels, ILookup<string, string> mailboxes, SweepReport report)
 {
-    private const string Mail = "mail";
     private const string Withdrawn = "its reader no longer has the address that it was decided for";
 
     public Deliveries(Store store, WorkingConfiguration configuration, SweepReport report)
@@ -63,7 +62,7 @@ public sealed class Deliveries(Store store, IReadOnlyList<INoticeChannel> channe
 
     /// <summary>An address that was mistyped or taken away since gets nothing more. The other channels go by the contact's id.</summary>
     private bool IsWanted(PendingDelivery pending) =>
-        pending.Delivery.Channel != Mail || mailboxes[pending.Notice.ContactId].Contains(pending.Delivery.Recipient, StringComparer.OrdinalIgnoreCase);
+        pending.Delivery.Channel != MailChannel.ChannelName || mailboxes[pending.Notice.ContactId].Contains(pending.Delivery.Recipient, StringComparer.OrdinalIgnoreCase);
 
     private ChannelOutcome Attempt(PendingDelivery pending)
     {
@@ -84,7 +83,7 @@ public sealed class Deliveries(Store store, IReadOnlyList<INoticeChannel> channe
         if (outcome.Result == ChannelResult.Delivered)
         {
             store.Write(session => session.Notices.MarkDelivered(key, way));
-            report.MailsDelivered += way.Channel == Mail ? 1 : 0;
+            report.MailsDelivered += way.Channel == MailChannel.ChannelName ? 1 : 0;
         }
         else if (Next(pending, outcome.Result, now) is { } next)
         {

@@ -1,3 +1,4 @@
+using LoadWatch.Delivery.Mail;
 using LoadWatch.Notices;
 using LoadWatch.People;
 using LoadWatch.Service.Configuration;
@@ -17,7 +18,7 @@ public static class MissedNotices
     {
         var told = configuration.Contacts.Select(contact => contact.Id).Concat(configuration.Administrators.Select(administrator => administrator.Id)).ToHashSet(StringComparer.Ordinal);
         var mailboxes = Mailboxes.Of(configuration);
-        return session.Notices.MissedDeliveries().Where(missed => told.Contains(missed.Contact) && (missed.Channel != "mail" || mailboxes.Contains(missed.Contact)));
+        return session.Notices.MissedDeliveries().Where(missed => told.Contains(missed.Contact) && (missed.Channel != MailChannel.ChannelName || mailboxes.Contains(missed.Contact)));
     }
 
     /// <summary>Those given up, and those that have been tried for a day or longer. A way that the contact no longer has is left out.</summary>
