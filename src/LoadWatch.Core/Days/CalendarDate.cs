@@ -17,15 +17,20 @@ internal sealed record CalendarDate(
     DayPlan Plan,
     IReadOnlyDictionary<string, LocalDate> Sources)
 {
-    public double? Load => DayLoad.Of(State, Adding(activity => activity.Load));
+    public double? Load { get; } = DayLoad.Of(State, Adding(Activities, activity => activity.Load));
 
-    public double? LoadError => Load is null ? null : DayLoad.ErrorOf(Adding(activity => activity.Session?.LoadError));
+    public double? LoadError => Load is null ? null : DayLoad.ErrorOf(Adding(Activities, activity => activity.Session?.LoadError));
 
     /// <summary>Of the activities that add to the date, in key order.</summary>
-    private List<double?> Adding(Func<ActivityOnDay, double?> value)
+    private static IReadOnlyList<double?> Adding(IReadOnlyList<ActivityOnDay> activities, Func<ActivityOnDay, double?> value)
     {
-        var values = new List<double?>(Activities.Count);
-        foreach (var activity in Activities)
+        if (activities.Count == 0)
+        {
+            return [];
+        }
+
+        var values = new List<double?>(activities.Count);
+        foreach (var activity in activities)
         {
             if (activity.AddsLoad)
             {

@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using LoadWatch.Plans;
 using NodaTime;
 
@@ -64,13 +65,12 @@ internal static class CalendarDates
             return sources;
         }
 
-        // From a sorted one it is copied as it is.
-        var seen = new SortedDictionary<string, LocalDate>(sources as SortedDictionary<string, LocalDate> ?? (IDictionary<string, LocalDate>)sources.ToDictionary(), StringComparer.Ordinal);
+        var seen = sources as ImmutableSortedDictionary<string, LocalDate> ?? sources.ToImmutableSortedDictionary(StringComparer.Ordinal);
         foreach (var activity in activities)
         {
             foreach (var source in activity.Sources)
             {
-                seen[source] = date;
+                seen = seen.SetItem(source, date);
             }
         }
 

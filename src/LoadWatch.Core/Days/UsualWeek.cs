@@ -10,28 +10,31 @@ internal readonly record struct UsualWeek(double Load, int Weeks)
     /// <param name="weeks">So many ordinary ones count, the newest.</param>
     public static UsualWeek? Of(IEnumerable<PastWeek> before, int weeks, int wanted)
     {
-        var loads = Newest(before, weeks);
+        Span<double> newest = stackalloc double[weeks];
+        var loads = newest[..Fill(newest, before)];
         loads.Sort();
-        return loads.Count < wanted || loads.Count == 0
+        return loads.Length < wanted || loads.Length == 0
             ? null
-            : new UsualWeek(Significant.Round((loads[(loads.Count - 1) / 2] + loads[loads.Count / 2]) / 2), loads.Count);
+            : new UsualWeek(Significant.Round((loads[(loads.Length - 1) / 2] + loads[loads.Length / 2]) / 2), loads.Length);
     }
 
-    private static List<double> Newest(IEnumerable<PastWeek> before, int weeks)
+    /// <returns>How many there are.</returns>
+    private static int Fill(Span<double> newest, IEnumerable<PastWeek> before)
     {
-        var loads = new List<double>(weeks);
+        var count = 0;
         foreach (var week in before)
         {
+            if (count == newest.Length)
+            {
+                break;
+            }
+
             if (week.IsOrdinary)
             {
-                loads.Add(week.Load!.Value);
-                if (loads.Count == weeks)
-                {
-                    break;
-                }
+                newest[count++] = week.Load!.Value;
             }
         }
 
-        return loads;
+        return count;
     }
 }

@@ -16,6 +16,9 @@ internal sealed class WeekTrend
 
     /// <summary>Of each date the 7 days that end with it.</summary>
     private readonly List<PastWeek> weeks = [];
+
+    /// <summary>Those that the newest is compared with, the newest first.</summary>
+    private readonly List<PastWeek> before = new(LookBackWeeks);
     private int lastSetAside = -WeekDays;
 
     /// <param name="acute">Load of the 7 days that end with the date.</param>
@@ -24,7 +27,8 @@ internal sealed class WeekTrend
     public (double? Usual, double? Change) Add(LocalDate date, double? acute, double coverage7, DayPlan plan)
     {
         Learn(date, acute, coverage7, plan);
-        return (UsualWeek.Of(Before(), UsualWeeks, WeeksWanted)?.Load, WeekChange.Of(weeks[^1].Load, Before())?.Fraction);
+        LookBack();
+        return (UsualWeek.Of(before, UsualWeeks, WeeksWanted)?.Load, WeekChange.Of(weeks[^1].Load, before)?.Fraction);
     }
 
     /// <summary>A day before the first date.</summary>
@@ -36,11 +40,12 @@ internal sealed class WeekTrend
         weeks.Add(PastWeek.EndingOn(date, acute, coverage7, weeks.Count - lastSetAside < WeekDays, KnownOf7));
     }
 
-    private IEnumerable<PastWeek> Before()
+    private void LookBack()
     {
+        before.Clear();
         for (var index = weeks.Count - 1 - WeekDays; index >= 0 && index >= weeks.Count - 1 - (WeekDays * LookBackWeeks); index -= WeekDays)
         {
-            yield return weeks[index];
+            before.Add(weeks[index]);
         }
     }
 }

@@ -16,14 +16,13 @@ public static class BriefBuilder
     /// <param name="date">The contact's local date on which the brief is due.</param>
     /// <param name="subjects">People; those outside the contact's groups or people are left out.</param>
     /// <param name="questions">Files held or refused and other things that need an answer.</param>
-    /// <param name="inboxIsAway">A watched folder cannot be looked into: nobody is named for what may lie in it.</param>
-    public static Brief Build(Contact contact, LocalDate date, IReadOnlyList<BriefSubject> subjects, IReadOnlyList<BriefLine> questions, bool inboxIsAway = false)
+    public static Brief Build(Contact contact, LocalDate date, IReadOnlyList<BriefSubject> subjects, IReadOnlyList<BriefLine> questions)
     {
         var forms = BriefForms.On(contact, date);
         var shown = Shown(contact, subjects);
         var self = contact.Role == ContactRole.Self && shown.Count == 1;
         var upTo = UpTo(shown);
-        var silent = CommonSilence.Of(shown, inboxIsAway);
+        var silent = CommonSilence.Of(shown);
 
         // The week lists them itself.
         var unseen = forms.Contains(BriefForm.Daily) && !forms.Contains(BriefForm.Weekly) ? UnseenAlerts.Lines(contact, date, shown, self) : [];
@@ -63,7 +62,7 @@ public static class BriefBuilder
     }
 
     /// <summary>Ids of those who get a picture: they want more days than others (<see cref="BriefDays.OfPicture"/>).</summary>
-    public static IReadOnlySet<string> Pictured(Contact contact, LocalDate date, IReadOnlyList<BriefSubject> subjects, bool inboxIsAway)
+    public static IReadOnlySet<string> Pictured(Contact contact, LocalDate date, IReadOnlyList<BriefSubject> subjects)
     {
         if (!BriefForms.On(contact, date).Contains(BriefForm.Daily))
         {
@@ -71,7 +70,7 @@ public static class BriefBuilder
         }
 
         var shown = Shown(contact, subjects);
-        return Named(ToLookAt(contact, date, shown, CommonSilence.Of(shown, inboxIsAway)), RowsAtMost).Select(subject => subject.Person.Id).ToHashSet(StringComparer.Ordinal);
+        return Named(ToLookAt(contact, date, shown, CommonSilence.Of(shown)), RowsAtMost).Select(subject => subject.Person.Id).ToHashSet(StringComparer.Ordinal);
     }
 
     private static LocalDate? UpTo(List<BriefSubject> shown) => shown.Where(subject => subject.Days.Count > 0).Max(subject => (LocalDate?)subject.Days[^1].Date);

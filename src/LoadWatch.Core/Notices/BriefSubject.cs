@@ -27,6 +27,9 @@ public sealed record BriefSubject(
     /// <summary>What would hold on the last date if plan or answers did not turn its rule off.</summary>
     public IReadOnlyList<Finding> Suppressed { get; init; } = [];
 
+    /// <summary>The inbox by which the person's recordings come cannot be looked into: nobody is named for what may lie in it.</summary>
+    public bool InboxIsAway { get; init; }
+
     /// <summary>Lines of the plan that cover the brief's date.</summary>
     public IReadOnlyList<PlanEntry> Planned { get; init; } = [];
 

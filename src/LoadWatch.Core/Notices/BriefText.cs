@@ -9,7 +9,7 @@ namespace LoadWatch.Notices;
 public static class BriefText
 {
     internal const string ToLookAt = "TO LOOK AT";
-    internal const string BackToUsual = "BACK TO USUAL";
+    internal const string NoLongerToLookAt = "NO LONGER TO LOOK AT";
     internal const string ReferenceValueChanged = "REFERENCE VALUE CHANGED";
     internal const string NeedsAnAnswer = "NEEDS AN ANSWER";
     internal const string Everybody = "EVERYBODY";
@@ -22,7 +22,7 @@ public static class BriefText
 
     /// <summary>Headings above what is said before the tables.</summary>
     internal static readonly IReadOnlyList<string> Headings =
-        [ToLookAt, Today, ToCall, TheWeek, StandingLong, LessLegWork, BackToUsual, ReferenceValueChanged, NeedsAnAnswer];
+        [ToLookAt, Today, ToCall, TheWeek, StandingLong, LessLegWork, NoLongerToLookAt, ReferenceValueChanged, NeedsAnAnswer];
 
     private static readonly LocalDatePattern LongDate = LocalDatePattern.Create("dddd d MMMM uuuu", CultureInfo.InvariantCulture);
 
@@ -60,7 +60,7 @@ public static class BriefText
         FormText.WriteSheets(lines, brief.Sheets);
         FormText.WriteCalls(lines, brief.Calls);
         FormText.WriteWeek(lines, brief.Week);
-        WriteSection(lines, BackToUsual, brief.Returned);
+        WriteSection(lines, NoLongerToLookAt, brief.Returned);
         WriteSection(lines, ReferenceValueChanged, brief.Changed);
         WriteSection(lines, NeedsAnAnswer, brief.Questions);
         BriefTextTable.Write(lines, brief.Groups);

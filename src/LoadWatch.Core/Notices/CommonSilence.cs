@@ -16,12 +16,12 @@ internal static class CommonSilence
 
     private const int WithinDays = 3;
 
-    /// <summary>The people whose silence is told in common, group by group: many of it, or all of it while an inbox is away, which explains any silence.</summary>
-    public static IReadOnlyList<BriefSubject> Of(IReadOnlyList<BriefSubject> shown, bool inboxIsAway) =>
+    /// <summary>The people whose silence is told in common, group by group: many at once, and whoever's inbox is away, which explains it.</summary>
+    public static IReadOnlyList<BriefSubject> Of(IReadOnlyList<BriefSubject> shown) =>
     [
         .. shown
             .GroupBy(subject => subject.Group.Id, StringComparer.Ordinal)
-            .SelectMany(group => inboxIsAway ? group.Where(IsSilent) : AtOnce([.. group])),
+            .SelectMany(group => AtOnce([.. group]).Union(group.Where(subject => subject.InboxIsAway && IsSilent(subject)))),
     ];
 
     /// <summary>The largest number of people whose last recordings lie within three days: who stopped weeks apart has a cause of their own.</summary>

@@ -19,7 +19,7 @@ public static class MailNames
     private static Brief CountsOnly(Brief brief) => brief with
     {
         ContactName = InitialledBrief.You,
-        FirstLine = $"{brief.FirstLine} {(brief.Returned.Count > 0 ? $"Back to usual: {brief.Returned.Count}. " : "")}The page has the rest.",
+        FirstLine = $"{brief.FirstLine} {(brief.Returned.Count > 0 ? $"No longer to look at: {brief.Returned.Count}. " : "")}The page has the rest.",
         Flagged = [],
         FlaggedBeyond = 0,
         Returned = [],

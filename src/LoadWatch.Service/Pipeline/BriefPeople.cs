@@ -13,7 +13,8 @@ namespace LoadWatch.Service.Pipeline;
 /// What briefs are built from, read within one session, once for all contacts: of most people the days of a strip, of few as many as their pictures and breaks
 /// want.
 /// </summary>
-public sealed class BriefPeople(WorkingConfiguration configuration, Instant now, StoreSession session)
+/// <param name="inboxesAway">Names of inboxes that cannot be looked into.</param>
+public sealed class BriefPeople(WorkingConfiguration configuration, Instant now, IReadOnlyList<string> inboxesAway, StoreSession session)
 {
     private const int RemarkDays = 14;
 
@@ -32,15 +33,14 @@ public sealed class BriefPeople(WorkingConfiguration configuration, Instant now,
     /// <summary>Everybody of whom a contact is told, as on a date.</summary>
     /// <param name="told">The position among the changes of alerts up to which the contact was told; null: nothing yet.</param>
     /// <param name="isFirst">No earlier date had a brief: all that stands is new.</param>
-    /// <param name="inboxIsAway">As the brief is built.</param>
-    public IReadOnlyList<BriefSubject> Of(Contact contact, LocalDate date, long? told, bool isFirst, bool inboxIsAway)
+    public IReadOnlyList<BriefSubject> Of(Contact contact, LocalDate date, long? told, bool isFirst)
     {
         var news = told is { } position ? Since(position) : null;
         var withPlan = BriefForms.On(contact, date).Contains(BriefForm.ClassSheet);
         var subjects = configuration.PeopleOf(contact)
             .Select(person => (withPlan ? Planned(person, date) : Recent(person)) with { Alerts = Alerts(person, news, isFirst) })
             .ToList();
-        var named = BriefBuilder.Pictured(contact, date, subjects, inboxIsAway);
+        var named = BriefBuilder.Pictured(contact, date, subjects);
         return subjects.ConvertAll(subject => named.Contains(subject.Person.Id) ? subject with { Days = Pictured(subject) } : subject);
     }
 
@@ -56,12 +56,17 @@ public sealed class BriefPeople(WorkingConfiguration configuration, Instant now,
                 Notes = Notes(person, through, [.. findings.Where(IsNote)]),
                 Suppressed = [.. findings.Where(finding => finding.Severity == Severity.Suppressed)],
                 Room = session.Rooms.Of(person.Id) is { } room && room.Date == through.PlusDays(1) ? room : null,
+                InboxIsAway = IsInboxAway(person),
             };
             recent[person.Id] = subject = WithBreak(subject);
         }
 
         return subject;
     }
+
+    /// <summary>Whether an inbox is away by which the person's latest recording came; of whom there is none, nobody knows by which they would.</summary>
+    private bool IsInboxAway(Person person) =>
+        inboxesAway.Count > 0 && (session.Sightings.InboxesOfLatest(person.Id) is not { Count: > 0 } inboxes || inboxes.Any(inboxesAway.Contains));
 
     private BriefSubject Planned(Person person, LocalDate date)
     {

@@ -108,7 +108,7 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
     }
 
     /// <summary>What the briefs of one session are built from: the same for all contacts.</summary>
-    public BriefPeople People(StoreSession session) => new(configuration, now, session);
+    public BriefPeople People(StoreSession session) => new(configuration, now, inboxesAway, session);
 
     /// <summary>The contact's brief as of now, due or not.</summary>
     public Brief Build(StoreSession session, Contact contact) => Build(session, People(session), contact);
@@ -121,8 +121,8 @@ public sealed class Briefs(WorkingConfiguration configuration, Instant now, IRea
         // New is what no brief of an earlier date told: the page of a morning stays the same after that morning's brief was decided.
         var earlier = session.Notices.LastBrief(contact.Id, date);
         var told = earlier ?? session.Notices.LastBrief(contact.Id, date.PlusDays(1));
-        var subjects = people.Of(contact, date, told?.AlertPosition, isFirst: earlier is null, inboxesAway.Count > 0);
-        return BriefBuilder.Build(contact, date, subjects, Questions(session, contact), inboxesAway.Count > 0);
+        var subjects = people.Of(contact, date, told?.AlertPosition, isFirst: earlier is null);
+        return BriefBuilder.Build(contact, date, subjects, Questions(session, contact));
     }
 
     private List<BriefLine> Questions(StoreSession session, Contact contact) =>

@@ -42,6 +42,12 @@ public sealed class SightingTable
         WHERE s.inbox = @inbox AND s.path = @path AND a.state = 'stored'
         """;
 
+    private const string SelectInboxesOfLatest = """
+        SELECT DISTINCT s.inbox FROM recording r JOIN sighting s ON s.sha = r.sha
+        WHERE r.person = @person AND r.start = (SELECT MAX(last.start) FROM recording last WHERE last.person = @person)
+        ORDER BY s.inbox
+        """;
+
     private const string SelectNewest = "SELECT first_seen FROM sighting ORDER BY first_seen DESC LIMIT 1";
 
     private const string SelectOldestWaiting = """
@@ -112,6 +118,9 @@ public sealed class SightingTable
         .ThenByDescending(sighting => sighting.Since)
         .ThenByDescending(sighting => sighting.Sha, StringComparer.Ordinal)
         .FirstOrDefault()?.Sha;
+
+    /// <summary>The inboxes in which a person's latest recording was seen, sorted; empty without one.</summary>
+    public IReadOnlyList<string> InboxesOfLatest(string person) => session.Rows<string>(SelectInboxesOfLatest, new { person });
 
     /// <summary>When a name was last seen with a content that was new there; null where nothing ever came.</summary>
     public Instant? Newest() => session.Row<MomentRow>(SelectNewest)?.FirstSeen;

@@ -23,7 +23,7 @@ public sealed class BriefTextTests
           middle half of 7 weeks. Load on 42 days, the highest 80 AU on 28 Feb; none
           on 14. Heavy or fast leg work on 14 days, the last on 27 Feb.
 
-        BACK TO USUAL
+        NO LONGER TO LOOK AT
         - Ben Ollery: Heavy or fast leg work is back.
 
         NEEDS AN ANSWER

@@ -51,12 +51,14 @@ public class CommonCauseTests
         Assert.Equal(silent, Build(Enumerable.Range(0, all).Select(number => Person(number, silent: number < silent, expected: false))).Flagged.Count);
 
     [Fact]
-    public void WhileAnInboxIsAwayNobodyIsNamedForSilence()
+    public void WhileAnInboxIsAwayNobodyWhoseRecordingsComeByItIsNamedForSilence()
     {
-        var people = Enumerable.Range(0, 9).Select(number => Person(number, silent: number == 0, expected: false)).ToList();
+        var people = Enumerable.Range(0, 9).Select(number => Person(number, silent: number < 2, expected: false)).ToList();
+        people[0] = people[0] with { InboxIsAway = true };
 
-        Assert.Empty(BriefBuilder.Build(Ada, Date, people, [], inboxIsAway: true).Flagged);
-        Assert.Single(BriefBuilder.Build(Ada, Date, people, [], inboxIsAway: false).Flagged);
+        var brief = Build(people);
+        Assert.Equal("p1", Assert.Single(brief.Flagged).PersonId);
+        Assert.StartsWith("Recordings of 1 of 9 people do not come in", brief.Questions[0].Sentence, StringComparison.Ordinal);
     }
 
     [Fact]

@@ -95,7 +95,7 @@ public sealed class MailNamesTests
 
         Assert.StartsWith(
             "Morning brief for you, Sunday 1 March 2026 Data up to Saturday 28 February 2026  "
-            + "1 of 4 to look at: 1 well above their usual. 1 question needs an answer. Back to usual: 1. The page has the rest.  HOW TO READ THIS",
+            + "1 of 4 to look at: 1 well above their usual. 1 question needs an answer. No longer to look at: 1. The page has the rest.  HOW TO READ THIS",
             text,
             StringComparison.Ordinal);
     }

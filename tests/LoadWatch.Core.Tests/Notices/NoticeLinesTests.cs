@@ -15,7 +15,7 @@ public sealed class NoticeLinesTests
                 + "consider comparing with what was planned: an easier day, or keeping the plan if it was meant; decides: you and the person. "
                 + "56 days to 28 Feb. The last 7 days: 480 AU; a usual week: 400 AU, the middle half of 7 weeks. Load on 42 days, the highest 80 AU on 28 Feb; "
                 + "none on 14. Heavy or fast leg work on 14 days, the last on 27 Feb.",
-            "2026-03-01 ada 5/6 back to usual: Ben Ollery: Heavy or fast leg work is back.",
+            "2026-03-01 ada 5/6 no longer to look at: Ben Ollery: Heavy or fast leg work is back.",
             "2026-03-01 ada 6/6 needs an answer: 2026-02-28.fit: Nobody is named as its owner.",
         ],
         NoticeLines.Of(Notice()));
