@@ -1,4 +1,5 @@
 using System.Diagnostics;
+using System.Net;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
@@ -56,16 +57,32 @@ public sealed class InboxIdentityTests : IDisposable
         Assert.Empty(folder.Sweep().MissingInboxes);
     }
 
+    /// <summary>Both have been silent for three weeks; the recordings of one come by the inbox that is away.</summary>
+    [Fact]
+    public void AnInboxThatIsAwayExplainsTheSilenceOfThoseWhoseRecordingsComeByIt()
+    {
+        AddSecondInbox();
+        for (var back = 23; back < 45; back += 2)
+        {
+            folder.Put($"anna/{back}.fit", Some.Fit(Some.Yesterday.PlusDays(-back)));
+            PutInSecond($"bo/{back}.fit", Some.Fit(Some.Yesterday.PlusDays(-back), 30));
+        }
+
+        folder.Sweep();
+        Assert.Equal(["Anna Ahola", "Bo Björk"], Flagged());
+        Unmount();
+
+        Assert.Equal(["inbox"], folder.Sweep().MissingInboxes);
+        Assert.Equal(["Bo Björk"], Flagged());
+    }
+
     /// <summary>A name that is gone speaks no more, but not because its inbox is away.</summary>
     [Fact]
     public void NothingIsForgottenOfAnInboxThatIsAway()
     {
         var ride = Some.Fit(Some.Yesterday);
-        folder.Write("loadwatch.json", File.ReadAllText(folder.ConfigPath).Replace(
-            "\"inboxes\": [", "\"inboxes\": [{ \"name\": \"second\", \"path\": \"second\" }, ", StringComparison.Ordinal));
-        Directory.CreateDirectory(Path.Combine(folder.Root, "second", "bo"));
-        File.WriteAllBytes(Path.Combine(folder.Root, "second", "bo", "ride.fit"), ride);
-        File.SetLastWriteTimeUtc(Path.Combine(folder.Root, "second", "bo", "ride.fit"), WorkingFolder.Now.ToDateTimeUtc().AddHours(-1));
+        AddSecondInbox();
+        PutInSecond("bo/ride.fit", ride);
         folder.Put("anna/ride.fit", ride);
         folder.Sweep();
         Assert.Equal(ArrivalState.Held, folder.Arrival(ride)!.State);
@@ -210,6 +227,23 @@ public sealed class InboxIdentityTests : IDisposable
         Assert.Empty(folder.Sweep().Unreadable);
         Assert.Equal(ArrivalState.Stored, Assert.Single(folder.Arrivals()).State);
     }
+
+    private void AddSecondInbox() => folder.Write("loadwatch.json", File.ReadAllText(folder.ConfigPath).Replace(
+        "\"inboxes\": [", "\"inboxes\": [{ \"name\": \"second\", \"path\": \"second\" }, ", StringComparison.Ordinal));
+
+    private void PutInSecond(string path, byte[] bytes)
+    {
+        var file = new FileInfo(Path.Combine(folder.Root, "second", path));
+        file.Directory!.Create();
+        File.WriteAllBytes(file.FullName, bytes);
+        File.SetLastWriteTimeUtc(file.FullName, WorkingFolder.Now.ToDateTimeUtc().AddHours(-1));
+    }
+
+    /// <summary>Names under "To look at", in their order.</summary>
+    private IEnumerable<string> Flagged() => File.ReadAllText(Path.Combine(folder.Root, "pages", "staff.html"))
+        .Split("<header><h3>")
+        .Skip(1)
+        .Select(person => WebUtility.HtmlDecode(person[..person.IndexOf('<', StringComparison.Ordinal)]));
 
     private void Unmount()
     {
