@@ -63,7 +63,7 @@ public static class LoadCalendar
 
     private static Day Bare(string person, CalendarDate date, SessionTrend trend, List<StimulusTrend> regions)
     {
-        DaySession[] sessions = [.. date.Activities.Select(activity => activity.Session).OfType<DaySession>()];
+        IReadOnlyList<DaySession> sessions = date.Activities.Count == 0 ? [] : [.. date.Activities.Select(activity => activity.Session).OfType<DaySession>()];
         var (largest, longestRun) = trend.Add(sessions);
         return new Day
         {
@@ -83,6 +83,14 @@ public static class LoadCalendar
         };
     }
 
-    private static Dictionary<BodyRegion, RegionDay> Regions(List<StimulusTrend> trends, CalendarDate date) =>
-        trends.ToDictionary(trend => trend.Region, trend => trend.Add(date));
+    private static Dictionary<BodyRegion, RegionDay> Regions(List<StimulusTrend> trends, CalendarDate date)
+    {
+        var regions = new Dictionary<BodyRegion, RegionDay>(trends.Count);
+        foreach (var trend in trends)
+        {
+            regions[trend.Region] = trend.Add(date);
+        }
+
+        return regions;
+    }
 }

@@ -112,6 +112,6 @@ public static class RoomFinder
         .Select(one =>
         {
             var usual = Significant.Round(one.Day.Usual14 / 2);
-            return new HeavyWeek(one.Region, one.Day.Days7, one.Day.Known7, usual, one.Day.Known7 >= KnownOf7 && usual is { } wanted ? one.Day.Days7 >= wanted : null);
+            return new HeavyWeek(one.Region, one.Day.Days7, one.Day.Known7, usual, one.Day.Known7 >= KnownOf7 && usual is > 0 and var wanted ? one.Day.Days7 >= wanted : null);
         });
 }

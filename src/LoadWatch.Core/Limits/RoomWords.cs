@@ -7,8 +7,10 @@ namespace LoadWatch.Limits;
 /// <summary>What the limits leave open on a date, in the words of a sentence without a name.</summary>
 public static class RoomWords
 {
-    /// <summary>What every place that shows the figure says of it.</summary>
-    public const string Meaning = "a figure to plan with, not a target and not a debt";
+    private const string Meaning = "a figure to plan with, not a target and not a debt";
+
+    /// <summary>What every place says that shows the figure: with it goes what it is meant for.</summary>
+    public static string WithMeaning(TodaysRoom room) => room is { Load: not null, IsPassedAtRest: false } ? $"{Of(room)}: {Meaning}" : Of(room);
 
     /// <summary><c>inside the limits today: up to 84 AU (more would pass the limit of load ratio)</c>.</summary>
     public static string Of(TodaysRoom room)

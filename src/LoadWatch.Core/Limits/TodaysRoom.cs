@@ -57,5 +57,5 @@ public enum NoRoom
 /// <param name="Days">Null where none of them is known.</param>
 /// <param name="Known">How many of the 7 days are known.</param>
 /// <param name="UsualDays">Half of the person's usual number in 14 days; null where that is not known.</param>
-/// <param name="IsReached">Null where the usual is not known, or fewer than 5 of the days.</param>
+/// <param name="IsReached">Null where the usual is not known or is none, or fewer than 5 of the days are known.</param>
 public sealed record HeavyWeek(BodyRegion Region, int? Days, int Known, double? UsualDays, bool? IsReached);

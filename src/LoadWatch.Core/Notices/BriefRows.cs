@@ -102,7 +102,7 @@ internal static class BriefRows
     {
         if (self && subject.Room is { Load: not null } room && room.Date == upTo.PlusDays(1))
         {
-            yield return $"{RoomWords.Of(room)}: {RoomWords.Meaning}";
+            yield return RoomWords.WithMeaning(room);
         }
     }
 

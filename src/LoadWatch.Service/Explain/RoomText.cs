@@ -17,7 +17,7 @@ internal static class RoomText
         foreach (var room in dates.Select(date => limits.Of(session, person, date)).OfType<TodaysRoom>())
         {
             var largest = room is { LargestDay: { } load, LargestDayOn: { } on } ? string.Create(CultureInfo.InvariantCulture, $"; largest day of the 30 before {load:0.###} on {Words.Date(on)}") : "";
-            text.AppendLine(CultureInfo.InvariantCulture, $"    the morning of {Words.Date(room.Date)}: {RoomWords.Of(room)}; {RoomWords.Meaning}{largest}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    the morning of {Words.Date(room.Date)}: {RoomWords.WithMeaning(room)}{largest}");
             foreach (var week in room.Regions)
             {
                 text.AppendLine(CultureInfo.InvariantCulture, $"        {RoomWords.Of(week)}");

@@ -116,6 +116,29 @@ public sealed class RoomFinderTests
         Assert.Equal((BodyRegion.Legs, heavy, 7, reached), (week.Region, week.Days!.Value, week.Known, week.IsReached!.Value));
     }
 
+    /// <summary>Of which nothing heavy is usual, that nothing is done is no usual that was reached.</summary>
+    [Fact]
+    public void WhereNoneIsUsualNothingIsReached()
+    {
+        var activities = Enumerable.Range(0, 90).Select(day => Activity(day, stimulus: Bouts(day == 0 ? 3 : 0))).ToArray();
+        var week = Assert.Single(RoomFinder.Of(Anna, Squad(Ratio), Build(89, activities), PersonPlan.None).Regions);
+
+        Assert.Null(week.IsReached);
+        Assert.Equal("heavy or fast work of the legs on 0 of the last 7 days (7 known), usually 0", RoomWords.Of(week));
+    }
+
+    [Fact]
+    public void OnlyAFigureIsSaidToBeOneToPlanWith()
+    {
+        var days = Days([.. Same(60, 100)]);
+        var away = new PersonPlan { Entries = [], Absences = [new Absence(AbsenceWord.Away, On(58), On(60))] };
+
+        Assert.Equal(
+            "inside the limits today: up to 100 AU, the largest day of the last 30: a figure to plan with, not a target and not a debt",
+            RoomWords.WithMeaning(RoomFinder.Of(Anna, Squad(None), days, PersonPlan.None)));
+        Assert.Equal("no figure for today: away", RoomWords.WithMeaning(RoomFinder.Of(Anna, Squad(None), days, away)));
+    }
+
     /// <summary>
     /// Read by the rules on a whole series with one more session: at the figure none raises, a little above it the named one does, and else the largest day is the bound.
     /// Hard days have neither deadband nor off-delay here, as a row that stands would be found at loads that do not raise it.
