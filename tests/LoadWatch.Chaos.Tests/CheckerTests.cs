@@ -1,5 +1,8 @@
+using System.Net.Sockets;
+using System.Text;
 using LoadWatch.Chaos.Digests;
 using LoadWatch.Chaos.Inputs;
+using LoadWatch.Chaos.Mail;
 using LoadWatch.Chaos.Places;
 using LoadWatch.Chaos.Processes;
 
@@ -75,6 +78,26 @@ public sealed class CheckerTests : IDisposable
         File.Delete(half);
         File.SetUnixFileMode(place.DatabasePath, UnixFileMode.UserRead | UnixFileMode.UserWrite | UnixFileMode.OtherRead);
         Assert.Contains("loadwatch.db", Fault(() => Leftovers.MustBeNone(place)), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void AMessageThatIsCutBeforeItsFinalDotDidNotCome()
+    {
+        using var server = new ScriptedServer();
+        Say(server, "Subject: half\r\n\r\nwas to be lon");
+        Say(server, "Subject: whole\r\n\r\ncame\r\n.\r\n");
+
+        Assert.Equal("came", Assert.Single(server.Received).Content.Split('\n')[2].Trim());
+    }
+
+    /// <summary>Sends what a killed sender may have sent, and waits until the server read all of it and hung up.</summary>
+    private static void Say(ScriptedServer server, string message)
+    {
+        using var client = new TcpClient("localhost", server.Port);
+        var line = client.GetStream();
+        line.Write(Encoding.ASCII.GetBytes("MAIL FROM:<a@example.org>\r\nRCPT TO:<b@example.org>\r\nDATA\r\n" + message));
+        client.Client.Shutdown(SocketShutdown.Send);
+        line.CopyTo(Stream.Null);
     }
 
     private static string Fault(Action check) => Assert.Throws<ChaosFailureException>(check).Message;

@@ -77,10 +77,11 @@ internal sealed class SmtpConversation
         return Say(answer ?? "250 recipient ok");
     }
 
+    /// <exception cref="EndOfStreamException">The sender went before the final dot: there is no message (RFC 5321, 4.1.1.4).</exception>
     private byte[] ReadMessage()
     {
         using var message = new MemoryStream();
-        for (var text = ReadLine(); text is not null and not "."; text = ReadLine())
+        for (var text = ReadWholeLine(); text != "."; text = ReadWholeLine())
         {
             message.Write(Encoding.Latin1.GetBytes(text.StartsWith('.') ? text[1..] : text));
             message.Write("\r\n"u8);
@@ -130,6 +131,8 @@ internal sealed class SmtpConversation
             line.Write(block);
         }
     }
+
+    private string ReadWholeLine() => ReadLine() ?? throw new EndOfStreamException();
 
     private string? ReadLine()
     {
