@@ -2,6 +2,7 @@ using System.Diagnostics;
 using System.Globalization;
 using System.Net.Sockets;
 using System.Text;
+using LoadWatch.Service.Tests.Pipeline;
 
 namespace LoadWatch.Service.Tests.Health;
 
@@ -32,7 +33,7 @@ internal sealed class SupervisedService : IDisposable
         patience.CancelAfter(Patience);
         var path = Path.Combine(folder, "notify");
         socket.Bind(new UnixDomainSocketEndPoint(path));
-        string[] words = ["-c", Parent, "systemd", "dotnet", Path.Combine(AppContext.BaseDirectory, "loadwatch.dll"), "run", "--config", Path.Combine(folder, "loadwatch.json")];
+        string[] words = ["-c", Parent, "systemd", .. Loadwatch.Program, "run", "--config", Path.Combine(folder, "loadwatch.json")];
         var start = new ProcessStartInfo("bash", words) { UseShellExecute = false, RedirectStandardOutput = true };
         start.Environment["NOTIFY_SOCKET"] = path;
         start.Environment["WATCHDOG_USEC"] = watchdog.TotalMicroseconds.ToString(CultureInfo.InvariantCulture);

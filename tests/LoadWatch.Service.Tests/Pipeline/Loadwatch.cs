@@ -16,7 +16,10 @@ internal sealed class Loadwatch : IDisposable
 
     private Loadwatch(Process process) => this.process = process;
 
-    private static string Program => Path.Combine(AppContext.BaseDirectory, "loadwatch.dll");
+    /// <summary>The words that start it: what <c>LOADWATCH_PUBLISHED</c> names, which is compiled ahead and starts sooner, else what was built beside the tests.</summary>
+    public static string[] Program { get; } = Environment.GetEnvironmentVariable("LOADWATCH_PUBLISHED") is { Length: > 0 } published
+        ? [Path.GetFullPath(published)]
+        : ["dotnet", Path.Combine(AppContext.BaseDirectory, "loadwatch.dll")];
 
     public int Id => process.Id;
 
@@ -33,7 +36,7 @@ internal sealed class Loadwatch : IDisposable
     /// <param name="tracer">A program with its options that runs the executable, or null.</param>
     public static Loadwatch Start(string[] words, string? input = null, (string Name, string Value)? environment = null, string[]? tracer = null)
     {
-        string[] line = [.. tracer ?? [], "dotnet", Program, .. words];
+        string[] line = [.. tracer ?? [], .. Program, .. words];
         var start = new ProcessStartInfo(line[0], line[1..])
         {
             UseShellExecute = false,
