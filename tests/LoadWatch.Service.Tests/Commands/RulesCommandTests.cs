@@ -33,6 +33,7 @@ public sealed class RulesCommandTests : IDisposable
         Assert.Contains("regions [\"legs\"]", printed, StringComparison.Ordinal);
         Assert.Contains("What mutes what:", printed, StringComparison.Ordinal);
         Assert.All(RuleMutes.All, mute => Assert.Contains(mute.How, printed, StringComparison.Ordinal));
+        Assert.DoesNotContain(" \n", printed, StringComparison.Ordinal);
     }
 
     [Theory]
