@@ -13,7 +13,7 @@ namespace LoadWatch.Activities;
 public static class ActivityComputation
 {
     /// <summary>Raised by one whenever a formula, a cut or a quantity changes: what an older program computed is then computed again.</summary>
-    public const int Version = 8;
+    public const int Version = 9;
 
     private static readonly Channel[] WithBestMeans = [Channel.HeartRate, Channel.Power, Channel.Speed];
 

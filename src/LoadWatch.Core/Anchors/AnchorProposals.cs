@@ -24,6 +24,11 @@ internal static class AnchorProposals
 
     private const double PowerMaxError = 0.05;
 
+    /// <summary>A sprint holds most of its best second for three; one reading among others of less is a fault of the meter.</summary>
+    private const double SprintShare = 0.85;
+
+    private const int SprintSeconds = 3;
+
     /// <summary>However well a line fits, what is measured is no surer than that.</summary>
     private const double LeastCriticalError = CapacityError.Measured;
 
@@ -92,7 +97,7 @@ internal static class AnchorProposals
     {
         var since = month.PlusMonths(-PowerMaxMonths);
         var best = sessions
-            .Where(session => session.Date >= since)
+            .Where(session => session.Date >= since && IsSprint(session))
             .Select(session => (session.Date, Watts: session.Best(Channel.Power, 1) ?? 0))
             .OrderByDescending(one => one.Watts).ThenByDescending(one => one.Date)
             .ToList();
@@ -100,6 +105,8 @@ internal static class AnchorProposals
             ? []
             : Plausible(new ObservedAnchor(person, AnchorKind.PowerMax, month, best[0].Watts, PowerMaxError * best[0].Watts, Again(best), "highest mean power of 1 s in the 6 months before") { Sport = sport });
     }
+
+    private static bool IsSprint(SessionBests session) => session.Best(Channel.Power, SprintSeconds) >= SprintShare * session.Best(Channel.Power, 1);
 
     /// <summary>The last date on which the best was reached within its error.</summary>
     private static LocalDate Again(IReadOnlyList<(LocalDate Date, double Watts)> best) => best.Where(one => one.Watts >= (1 - PowerMaxError) * best[0].Watts).Max(one => one.Date);

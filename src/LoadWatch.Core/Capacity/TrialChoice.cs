@@ -3,7 +3,8 @@
 // 2. of work, or distance, on time only what lies within 1 % of the upper hull stays: an effort below the line between two others was not all out;
 // 3. the shortest corner of the hull goes as long as it is a mere piece of the next: the line through both meets time 0 at less than 5 % of what was done;
 // 4. at least 3 of 3 sessions must be left, the longest 3 times as long as the shortest;
-// 5. the line through them must be sure: critical value within 5 %, reserve within 25 %, both above 0; else the longest goes, since long efforts are rarely all out.
+// 5. the line through them must be sure: critical value within 5 %, reserve within 25 %, both above 0; else the longest goes, since long efforts are rarely all out;
+// 6. the mean of the shortest must be above that of the longest by 10 % of power, 5 % of speed: bests so alike at all durations are those of steady work, and tell no curve.
 // Durations of 2 to 15, at most 30 minutes are those for which the line holds (Monod and Scherrer 1965; Moritani et al. 1981). All numbers are choices.
 using System.Globalization;
 using LoadWatch.Recordings;
@@ -25,11 +26,16 @@ public sealed record TrialChoice(IReadOnlyList<ChosenTrial> Trials, CapacityFit?
 
     private const int ShortestSeconds = 120;
     private const int LongestSeconds = 1200;
+    private const double LeastCurvePower = 0.10;
+    private const double LeastCurveSpeed = 0.05;
     private const double NearHull = 0.99;
     private const double PieceShare = 0.05;
 
     /// <summary>Corners flatter than that are the last digits of one line.</summary>
     private const double Flat = 1e-6;
+
+    /// <summary>The shortest and the longest duration that is looked at, s.</summary>
+    public static IReadOnlyList<int> Span { get; } = [ShortestSeconds, LongestSeconds];
 
     /// <param name="sessions">Of one person and one kind of movement, in any order.</param>
     /// <param name="channel">Power, or speed.</param>
@@ -46,7 +52,7 @@ public sealed record TrialChoice(IReadOnlyList<ChosenTrial> Trials, CapacityFit?
         while (Lack(trials) is null)
         {
             var fit = WorkTimeFit.Of([.. trials.Select(one => one.Trial)])!;
-            if (Doubt(fit, channel) is not { } doubt)
+            if ((Flatness(trials, channel) ?? Doubt(fit, channel)) is not { } doubt)
             {
                 return new TrialChoice(trials, fit, Refusal: null);
             }
@@ -125,6 +131,16 @@ public sealed record TrialChoice(IReadOnlyList<ChosenTrial> Trials, CapacityFit?
         var (shortest, longest) = (trials[0].Trial.Seconds, trials[^1].Trial.Seconds);
         return longest < LongestOverShortest * shortest
             ? $"bests that may have been all out last {Number(shortest)} to {Number(longest)} s; the longest is to last {Number(LongestOverShortest)} times as long as the shortest"
+            : null;
+    }
+
+    /// <summary>Whoever rides or runs alike for two minutes and for ten was not at a limit in both, however well a line fits.</summary>
+    private static string? Flatness(List<ChosenTrial> trials, Channel channel)
+    {
+        var above = (trials[0].Trial.Mean / trials[^1].Trial.Mean) - 1;
+        var wanted = channel == Channel.Speed ? LeastCurveSpeed : LeastCurvePower;
+        return above < wanted
+            ? $"the best of {Number(trials[0].Trial.Seconds)} s is above that of {Number(trials[^1].Trial.Seconds)} s by {Percent(above)} %, wanted is {Percent(wanted)} %; they were hardly all out"
             : null;
     }
 

@@ -39,7 +39,7 @@ internal static class EffortMinutes
         if (sport.IsOnFoot)
         {
             return usable[Channel.Cadence] is { } cadence ? BySteps(cadence, StepCadence.Lines(equations.StepCadence, person.AgeOn(date)))
-                : usable[Channel.Speed] is { } speed ? BySpeed(speed, usable[Channel.Altitude], isRun: sport.Name == "running")
+                : usable[Channel.Speed] is { } speed ? BySpeed(speed, usable[Channel.Altitude], sport)
                 : null;
         }
 
@@ -60,18 +60,18 @@ internal static class EffortMinutes
         return time;
     }
 
-    private static EffortTime BySpeed(UsableChannel speed, UsableChannel? altitude, bool isRun)
+    private static EffortTime BySpeed(UsableChannel speed, UsableChannel? altitude, Sport sport)
     {
         var gradients = ArrayPool<double>.Shared.Rent(speed.Count);
         try
         {
             gradients.AsSpan(0, speed.Count).Clear();
-            if (altitude is not null)
+            if (Gradients.AreKnown(altitude, sport))
             {
                 Gradients.Along(speed, altitude, gradients.AsSpan(0, speed.Count));
             }
 
-            return BySpeed(speed, gradients, isRun);
+            return BySpeed(speed, gradients, isRun: sport.Name == "running");
         }
         finally
         {

@@ -22,7 +22,7 @@ internal static class EnduranceRemarks
     /// <summary>Of speed, where it was read.</summary>
     public static IEnumerable<string> OfSpeed(Sport sport, bool hasAltitude, bool isFast)
     {
-        if (sport.Detail == SpeedStimulus.Treadmill)
+        if (sport.Detail == Gradients.Treadmill)
         {
             yield return "incline of the treadmill: read as level";
         }

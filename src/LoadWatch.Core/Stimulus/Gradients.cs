@@ -1,5 +1,7 @@
 using System.Buffers;
+using System.Diagnostics.CodeAnalysis;
 using LoadWatch.Activities;
+using LoadWatch.Recordings;
 
 namespace LoadWatch.Stimulus;
 
@@ -13,7 +15,16 @@ public static class Gradients
     /// <summary>Metres to either side.</summary>
     public const double ReachMetres = 50;
 
+    internal const string Treadmill = "treadmill";
+
     private const double LeastMetres = 10;
+
+    /// <summary>Heights within this are level ground: a pitch, a track, noise. A choice.</summary>
+    private const double LevelMetres = 10;
+
+    /// <summary>Whether there are heights that tell of slopes: not on a treadmill, whose slope nobody records, and not where they differ by less than 10 m.</summary>
+    public static bool AreKnown([NotNullWhen(true)] UsableChannel? altitude, Sport sport) =>
+        altitude is not null && sport.Detail != Treadmill && altitude.Extremes() is var (lowest, highest) && highest - lowest >= LevelMetres;
 
     /// <param name="gradients">Room for one per reading of speed.</param>
     public static void Along(UsableChannel speed, UsableChannel altitude, Span<double> gradients)

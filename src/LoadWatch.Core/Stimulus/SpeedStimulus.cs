@@ -10,18 +10,13 @@ namespace LoadWatch.Stimulus;
 /// </summary>
 public static class SpeedStimulus
 {
-    /// <summary>Heights within this are level ground: a pitch, a track, noise. A choice.</summary>
-    private const double LevelMetres = 10;
-
     private const int FastMilliseconds = 100;
-
-    internal const string Treadmill = "treadmill";
 
     /// <param name="speed">Usable readings, m/s.</param>
     /// <param name="altitude">Usable readings, m, or null.</param>
     public static EnduranceEstimate Of(UsableChannel speed, UsableChannel? altitude, Sport sport, SpeedCapacity capacity, Variants variants)
     {
-        var slopes = HasSlopes(altitude, sport) ? altitude : null;
+        var slopes = Gradients.AreKnown(altitude, sport) ? altitude : null;
         var isFast = IsFast(speed.Milliseconds);
         var grade = isFast && slopes is null && capacity.IsTested ? Grade.C : Grade.D;
         IReadOnlyList<string> notSeen = [.. capacity.NotSeen, .. EnduranceRemarks.OfSpeed(sport, altitude is not null, isFast)];
@@ -43,9 +38,6 @@ public static class SpeedStimulus
             ArrayPool<double>.Shared.Return(room);
         }
     }
-
-    private static bool HasSlopes(UsableChannel? altitude, Sport sport) =>
-        altitude is not null && sport.Detail != Treadmill && altitude.Extremes() is var (lowest, highest) && highest - lowest >= LevelMetres;
 
     /// <summary>Fills in the speeds on the level that cost as much.</summary>
     private static void Level(UsableChannel speed, UsableChannel altitude, bool walking, Span<double> level)

@@ -44,6 +44,25 @@ public class AnchorContradictionTests
             Assert.Single(On(observed, Given.Anchor(AnchorKind.OneRepetitionMax, 90, exercise: "leg_press") with { Machine = "Press 2" })).Words);
     }
 
+    /// <summary>Who rides at less than four fifths of what was measured has not gone to the limit; there is nothing to measure again for that.</summary>
+    [Theory]
+    [InlineData(191, false)]
+    [InlineData(192, true)]
+    [InlineData(300, true)]
+    public void ALineFarBelowTheMeasuredOneAsksNothing(double shown, bool asked) =>
+        Assert.Equal(asked, On(Observed(AnchorKind.CriticalPower, shown, 5), Given.Anchor(AnchorKind.CriticalPower, 240)).Count == 1);
+
+    /// <summary>By hand: measured 240 W and 18 kJ are 390 W over 120 s; 180 W and 15.84 kJ are 312 W, 80 % of it; with 15.6 kJ 310 W are not.</summary>
+    [Theory]
+    [InlineData(15_840, true)]
+    [InlineData(15_600, false)]
+    public void WithBothReservesTheNearestThatTheLinesComeCounts(double reserve, bool asked) => Assert.Equal(
+        asked,
+        AnchorContradiction.On(
+            Given.Date,
+            [Observed(AnchorKind.CriticalPower, 180, 5), Observed(AnchorKind.WPrime, reserve, 1000)],
+            Given.Anchors(Given.Anchor(AnchorKind.CriticalPower, 240), Given.Anchor(AnchorKind.WPrime, 18_000))).Count == 1);
+
     [Fact]
     public void TheLatestAdoptedValueSpeaks()
     {

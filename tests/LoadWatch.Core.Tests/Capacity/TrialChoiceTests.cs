@@ -88,6 +88,21 @@ public class TrialChoiceTests
         Assert.Contains("with longer ones the bests lie on no line: critical power within ", choice.Refusal);
     }
 
+    /// <summary>By hand: W = 5 kJ + 200 W t: 216.7 W for 300 s are 6 % above the 204.2 W of 1200 s, on one line without any error.</summary>
+    [Fact]
+    public void BestsThatAreAlikeAtAllDurationsAreRefused()
+    {
+        var choice = Of(Steady("a", 300), Steady("b", 600), Steady("c", 1200));
+
+        Assert.Null(choice.Fit);
+        Assert.EndsWith("with longer ones the best of 300 s is above that of 1200 s by 6 %, wanted is 10 %; they were hardly all out", choice.Refusal);
+    }
+
+    /// <summary>The same curve over speed is told: 5 % is what is wanted there.</summary>
+    [Fact]
+    public void OfSpeedAFlatterCurveIsTold() =>
+        Assert.NotNull(TrialChoice.Of([.. new[] { Steady("a", 300), Steady("b", 600), Steady("c", 1200) }.Select(AsRun)], Channel.Speed).Fit);
+
     [Fact]
     public void SpeedIsNamedAsSuch() =>
         Assert.Contains("critical speed", TrialChoice.Of([.. new[] { Ride("a", (120, 700)), Ride("b", (300, 500)), Ride("c", (480, 360)) }.Select(AsRun)], Channel.Speed).Refusal);
@@ -101,6 +116,8 @@ public class TrialChoiceTests
 
     /// <summary>So long as W' lasts, and easy before and behind.</summary>
     private static SessionBests AllOut(string key, int seconds) => Ride(key, (seconds, Critical + (Reserve / seconds)));
+
+    private static SessionBests Steady(string key, int seconds) => Ride(key, (seconds, 200 + (5000.0 / seconds)));
 
     private static SessionBests Easy(string key) => Ride(key, (1200, 180));
 

@@ -48,6 +48,19 @@ public class EffortMinutesTests
             (minutes, minutes),
             Minutes("hiking", Given.EverySecond((Channel.Speed, Given.Steps((1.1, 600))), (Channel.Altitude, [.. Enumerable.Range(0, 601).Select(second => second * rise)]))));
 
+    /// <summary>A watch indoors may drift by any height: a treadmill's slope is in no recording. Nor are 9 m a climb.</summary>
+    [Theory]
+    [InlineData("treadmill", 0.11)]
+    [InlineData(null, 0.0149)]
+    public void WithoutKnownSlopesAWalkCountsAsLevel(string? detail, double rise)
+    {
+        var samples = Given.EverySecond((Channel.Speed, Given.Steps((1.1, 600))), (Channel.Altitude, [.. Enumerable.Range(0, 601).Select(second => second * rise)]));
+
+        var minutes = Of(Given.Recording("walking", samples) with { Sport = new Sport("walking", detail) });
+
+        Assert.Equal([0, 0], minutes.Select(one => one.Value));
+    }
+
     /// <summary>By hand: at 1.3 m/s a walk, 3.5 + 7.8 = 11.3 mL/kg/min; at 1.5 m/s a run, 3.5 + 18 = 21.5, 6.14 METs.</summary>
     [Fact]
     public void ARunCountsAsOneFromEightyMetresAMinuteOn() =>
@@ -85,8 +98,11 @@ public class EffortMinutesTests
     }
 
     private static List<Quantity> Of(string sport, SampleSeries samples, EquationChoices? equations = null, int? birthYear = null, params Anchor[] anchors) =>
+        Of(Given.Recording(sport, samples), equations, birthYear, anchors);
+
+    private static List<Quantity> Of(Recording recording, EquationChoices? equations = null, int? birthYear = null, params Anchor[] anchors) =>
         [.. ActivityComputation.Compute(
-                Given.Recording(sport, samples),
+                recording,
                 Given.Person(birthYear: birthYear),
                 Given.Anchors(anchors),
                 new ComputationSettings { Equations = equations ?? new EquationChoices() })
