@@ -15,6 +15,16 @@ public static class CsvDecoder
     /// <param name="layouts">The layouts known.</param>
     public static DecodedFile Decode(ReadOnlyMemory<byte> bytes, IReadOnlyList<CsvLayout> layouts) => Decode(CsvSource.Of(bytes), layouts);
 
+    /// <summary>The same of a file that is never held whole: memory holds no more than the channels and rows that it gives.</summary>
+    /// <param name="open">Opens the file at its start; the stream can seek. It is opened several times.</param>
+    /// <param name="layouts">The layouts known.</param>
+    /// <exception cref="IOException">The file could not be read.</exception>
+    public static DecodedFile Decode(Func<Stream> open, IReadOnlyList<CsvLayout> layouts)
+    {
+        ArgumentNullException.ThrowIfNull(open);
+        return Decode(new CsvSource(open), layouts);
+    }
+
     /// <summary>
     /// Reads a CSV of any size in flat memory: each recording of a person is handed on as it ends, numbered in that order. The rows of a person must
     /// stand in the order of time as far as sessions go, and speeds in another unit are not told. A table is read whole.

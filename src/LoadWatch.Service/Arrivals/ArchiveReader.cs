@@ -13,22 +13,54 @@ public sealed class ArchiveReader(Store store, Archive archive, DecoderSet decod
     /// The content of an archive object and of everything inside it, for each name under which the object was seen; null where the original is missing or
     /// damaged.
     /// </summary>
-    public IEnumerable<SeenContent>? Sighted(string objectSha) => archive.ReadWhole(objectSha) is { } bytes
-        ? SightingsOf(objectSha).SelectMany(sighting => Expand(objectSha, sighting, bytes)
+    public IEnumerable<SeenContent>? Sighted(string objectSha) => Expansion(objectSha) is { } expand
+        ? SightingsOf(objectSha).SelectMany(sighting => expand(sighting.Path)
             .Select(content => new SeenContent(content, new Origin(sighting.Inbox, sighting.FirstSeen, sighting.Stamp))))
         : null;
 
     /// <summary>The content of an archive object and of the arrivals inside it that are kept nowhere else; null where the original is missing or damaged.</summary>
-    public IEnumerable<SeenContent>? Kept(string objectSha) => archive.ReadWhole(objectSha) is { } bytes
-        ? Expand(objectSha, SightingsOf(objectSha)[0], bytes)
+    public IEnumerable<SeenContent>? Kept(string objectSha) => Expansion(objectSha) is { } expand
+        ? expand(SightingsOf(objectSha)[0].Path)
             .Where(content => KeptIn(content.Sha) is not { } kept || kept == objectSha)
             .Select(content => new SeenContent(content, null))
         : null;
 
     private IReadOnlyList<Sighting> SightingsOf(string sha) => store.Read(session => session.Sightings.Of(sha));
 
-    private IEnumerable<ArrivalContent> Expand(string objectSha, Sighting sighting, byte[] bytes) =>
-        ArrivalContent.Expand(decoders, objectSha, sighting.Path, bytes);
+    /// <summary>Gives the contents under a path; null where the original is missing or damaged.</summary>
+    private Func<string, IEnumerable<ArrivalContent>>? Expansion(string objectSha)
+    {
+        if (LargeTextIn(objectSha) is { } large)
+        {
+            return IsWhole(objectSha) ? path => [large with { Path = path }] : null;
+        }
+
+        return archive.ReadWhole(objectSha) is { } bytes ? path => ArrivalContent.Expand(decoders, objectSha, path, bytes) : null;
+    }
+
+    private ArrivalContent? LargeTextIn(string objectSha)
+    {
+        try
+        {
+            return LargeText.In(archive, objectSha, "");
+        }
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+        {
+            return null; // Reading it whole says so too.
+        }
+    }
+
+    private bool IsWhole(string objectSha)
+    {
+        try
+        {
+            return archive.Verify(objectSha);
+        }
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+        {
+            return false;
+        }
+    }
 
     private string? KeptIn(string sha) => store.Read(session => session.Arrivals.Get(sha))?.ObjectSha;
 }

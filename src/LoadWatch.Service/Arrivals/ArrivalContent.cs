@@ -9,11 +9,18 @@ namespace LoadWatch.Service.Arrivals;
 /// <param name="Sha">SHA-256 of the content itself.</param>
 /// <param name="ParentSha">The archive file around it, or null.</param>
 /// <param name="Path">Where it was seen, inside archives as <c>outer.zip!/inner.fit</c>.</param>
+/// <param name="Bytes">Empty where <see cref="Open"/> gives them.</param>
 /// <param name="Members">Files in this content that could be unpacked, where it is an archive.</param>
 /// <param name="Problems">What went wrong with the others.</param>
 public sealed record ArrivalContent(
     string Sha, string? ParentSha, string Path, ContentKind Kind, ReadOnlyMemory<byte> Bytes, int Members, IReadOnlyList<Problem> Problems)
 {
+    /// <summary>Opens a text that is too large to be held, at its start; null for every other content.</summary>
+    public Func<Stream>? Open { get; init; }
+
+    /// <summary>Bytes.</summary>
+    public long Size { get; init; } = Bytes.Length;
+
     /// <summary>The content and, for an archive, its members, each an arrival of its own; the archive comes last, when its members are known.</summary>
     public static IEnumerable<ArrivalContent> Expand(DecoderSet decoders, string sha, string path, ReadOnlyMemory<byte> bytes) =>
         Expand(decoders, sha, null, path, bytes, 0);

@@ -10,6 +10,9 @@ namespace LoadWatch.Service.Arrivals;
 /// <summary>Reads one file whole into the archive's staging, or says why not yet. Safe to use from several threads.</summary>
 public sealed class FileTaker(WorkingConfiguration configuration, Archive archive, DecoderSet decoders, Instant now)
 {
+    // No limit can be set lower: of a file that stands still nothing has to be known before it is read.
+    private const long AlwaysTakenBytes = 1024 * 1024;
+
     public Taking Take(FoundFile file)
     {
         switch (SafeFile.Open(file.FullPath))
@@ -41,19 +44,24 @@ public sealed class FileTaker(WorkingConfiguration configuration, Archive archiv
 
     private Taking Take(FoundFile file, OpenedFile opened)
     {
-        if (opened.Stamp.Size > configuration.LargestFileBytes)
+        var size = opened.Stamp.Size;
+        var settled = SettledFiles.IsSettled(opened.Stamp, now, configuration.Settle);
+        var kind = settled && size <= AlwaysTakenBytes ? (ContentKind?)null : KindOf(opened.Stream);
+        var largest = kind == ContentKind.Text ? configuration.LargestCsvBytes : configuration.LargestFileBytes;
+        if (size > largest)
         {
-            return Unreadable(file, $"larger than {configuration.LargestFileBytes / (1024 * 1024)} MB");
+            return Unreadable(file, $"larger than {largest / (1024 * 1024)} MB");
         }
 
-        var settled = SettledFiles.IsSettled(opened.Stamp, now, configuration.Settle);
-        if (!settled && !ShowsItsEnd(opened.Stream))
+        if (!settled && !ShowsItsEnd(kind))
         {
             return new Taking.Settling();
         }
 
-        // Where nothing was staged it grew past the limit while it was read.
-        return archive.Stage(opened.Stream, configuration.LargestFileBytes) is StagedCopy copy ? Take(file, opened, settled, copy) : new Taking.Settling();
+        // Where nothing was staged it grew past the limit while it was read; what is held may not grow to what could not be.
+        var isHeld = !LargeText.Is(kind, size);
+        var limit = isHeld ? Math.Min(largest, Math.Max(configuration.LargestFileBytes, LargeText.HeldBytes)) : largest;
+        return archive.Stage(opened.Stream, limit, isHeld) is StagedCopy copy ? Take(file, opened, settled, copy) : new Taking.Settling();
     }
 
     private Taking Take(FoundFile file, OpenedFile opened, bool settled, StagedCopy copy)
@@ -77,19 +85,13 @@ public sealed class FileTaker(WorkingConfiguration configuration, Archive archiv
     private static Taking.Unreadable Unreadable(FoundFile file, string reason) => new(new BriefLine(file.Path, reason));
 
     /// <summary>FIT, gzip and zip show by their content whether they are whole; text never does.</summary>
-    private static bool ShowsItsEnd(FileStream stream)
-    {
-        var head = new byte[DecoderSet.HeadLength];
-        var length = ReadHead(stream, head);
-        stream.Position = 0;
-        return DecoderSet.Recognise(head.AsSpan(0, length)) is ContentKind.Fit or ContentKind.Gzip or ContentKind.Zip;
-    }
+    private static bool ShowsItsEnd(ContentKind? kind) => kind is ContentKind.Fit or ContentKind.Gzip or ContentKind.Zip;
 
-    private static int ReadHead(FileStream stream, byte[] head)
+    private static ContentKind KindOf(FileStream stream)
     {
         try
         {
-            return stream.ReadAtLeast(head, head.Length, throwOnEndOfStream: false);
+            return LargeText.KindOf(stream);
         }
         catch (IOException error)
         {

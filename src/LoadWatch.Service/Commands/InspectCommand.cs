@@ -18,9 +18,6 @@ public static class InspectCommand
     // Without a configuration: the most that one can set.
     private const long LargestFileBytes = 512L * 1024 * 1024;
 
-    // Larger ones that are text are read as a stream, whatever their size; with a configuration what a sweep takes in is read like there.
-    private const long HeldWholeBytes = 32L * 1024 * 1024;
-
     public static Command Create()
     {
         var files = new Argument<string[]>("files") { Description = "FIT or CSV files, also in gzip or zip.", Arity = ArgumentArity.ZeroOrMore };
@@ -63,7 +60,7 @@ public static class InspectCommand
         var configuration = configPath is null ? null : ConfigurationReader.Read(configPath);
         var largest = configuration?.LargestFileBytes ?? LargestFileBytes;
         var decoders = new DecoderSet(configuration?.Layouts ?? Decoding.Csv.BuiltInLayouts.All, ContainerLimits.For(largest));
-        var reading = new Reading(decoders, largest, configuration?.LargestFileBytes ?? HeldWholeBytes, configuration?.Inboxes.Any(inbox => inbox.Salvage) ?? false);
+        var reading = new Reading(decoders, largest, configuration?.LargestCsvBytes, configuration?.Inboxes.Any(inbox => inbox.Salvage) ?? false);
         var lines = names.AsParallel().AsOrdered().SelectMany(name => Inspect(reading, name)).AsSequential();
         using var output = new StreamWriter(Console.OpenStandardOutput(), new UTF8Encoding(false), 1 << 16);
         if (json)
@@ -98,9 +95,9 @@ public static class InspectCommand
     {
         using (opened)
         {
-            if (opened.Stamp.Size > reading.HeldWholeBytes && IsText(opened.Stream))
+            if (opened.Stamp.Size > LargeText.HeldBytes && LargeText.KindOf(opened.Stream) == ContentKind.Text)
             {
-                return Through(reading.Decoders, name);
+                return opened.Stamp.Size <= reading.TakenTextBytes ? AsTakenIn(reading.Decoders, name) : Through(reading.Decoders, name);
             }
 
             if (opened.Stamp.Size > reading.LargestFileBytes)
@@ -118,12 +115,17 @@ public static class InspectCommand
         }
     }
 
-    private static bool IsText(FileStream stream)
+    /// <summary>A large CSV that a sweep would take in, read like there.</summary>
+    private static IEnumerable<InspectLine> AsTakenIn(DecoderSet decoders, string name)
     {
-        var head = new byte[DecoderSet.HeadLength];
-        var length = stream.ReadAtLeast(head, head.Length, throwOnEndOfStream: false);
-        stream.Position = 0;
-        return DecoderSet.Recognise(head.AsSpan(0, length)) == ContentKind.Text;
+        try
+        {
+            return Of(name, decoders.DecodeText(() => SafeFile.Reopen(name)));
+        }
+        catch (IOException)
+        {
+            return [InspectLine.Unreadable(name, "it could not be read to its end")];
+        }
     }
 
     /// <summary>A large CSV, of which no more is held than the sessions under way.</summary>
@@ -168,11 +170,12 @@ public static class InspectCommand
                 : [];
         }
 
-        var file = reading.Decoders.Decode(content.Bytes, reading.Salvages);
-        return file.Recordings.Count == 0
-            ? [InspectLine.WithoutRecording(content.Path, file.Kind, file.Problems) with { Table = TableText(file.Table) }]
-            : file.Recordings.Select(recording => InspectLine.Of(content.Path, file, recording));
+        return Of(content.Path, reading.Decoders.Decode(content.Bytes, reading.Salvages));
     }
+
+    private static IEnumerable<InspectLine> Of(string path, DecodedFile file) => file.Recordings.Count == 0
+        ? [InspectLine.WithoutRecording(path, file.Kind, file.Problems) with { Table = TableText(file.Table) }]
+        : file.Recordings.Select(recording => InspectLine.Of(path, file, recording)).ToList();
 
     /// <summary><c>table of sets by layout gym: 120 rows of 12 people, 2026-03-01 to 2026-03-31</c>.</summary>
     private static string? TableText(DecodedTable? table)
@@ -218,7 +221,7 @@ public static class InspectCommand
     }
 
     /// <param name="LargestFileBytes">Larger ones are not read, but for text.</param>
-    /// <param name="HeldWholeBytes">Text of more bytes is read as a stream.</param>
+    /// <param name="TakenTextBytes">Large text of no more bytes is read like a sweep does, other large text through in flat memory; null: all of it.</param>
     /// <param name="Salvages">Whether what lies before the end of a cut FIT file is used.</param>
-    private sealed record Reading(DecoderSet Decoders, long LargestFileBytes, long HeldWholeBytes, bool Salvages);
+    private sealed record Reading(DecoderSet Decoders, long LargestFileBytes, long? TakenTextBytes, bool Salvages);
 }

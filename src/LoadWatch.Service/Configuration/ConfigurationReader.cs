@@ -86,7 +86,8 @@ public sealed class ConfigurationReader
             computation,
             Duration.FromSeconds(file.Intake.ScanSeconds),
             Duration.FromSeconds(file.Intake.SettleSeconds),
-            file.Intake.LargestFileMegabytes * 1024L * 1024L)
+            file.Intake.LargestFileMegabytes * 1024L * 1024L,
+            file.Intake.LargestCsvMegabytes * 1024L * 1024L)
         {
             AllowNetworkDataFolder = file.AllowNetworkDataFolder,
             Administrators = administrators,

@@ -265,7 +265,11 @@ public sealed record IntakeEntry
     [Range(0, 86400)]
     public int SettleSeconds { get; init; } = 60;
 
-    /// <summary>Largest file taken, megabytes.</summary>
+    /// <summary>Largest file taken that is no CSV, megabytes.</summary>
     [Range(1, 512)]
     public int LargestFileMegabytes { get; init; } = 32;
+
+    /// <summary>Largest CSV taken that is not packed, megabytes.</summary>
+    [Range(1, 4096)]
+    public int LargestCsvMegabytes { get; init; } = 512;
 }

@@ -31,7 +31,8 @@ public sealed record WorkingConfiguration(
     ComputationSettings Computation,
     Duration ScanEvery,
     Duration Settle,
-    long LargestFileBytes)
+    long LargestFileBytes,
+    long LargestCsvBytes)
 {
     /// <summary>The mail server; null when there is none.</summary>
     public MailSettings? Mail { get; init; }

@@ -52,7 +52,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
             return new DecodedArrival(content.Sha, kind, ContainerVerdict(content), []);
         }
 
-        var file = decoders.Decode(content.Bytes, salvages);
+        var file = DecodeFile(content, salvages);
         if (Subjects(file) is { Count: > 0 } subjects && (subjects.Count > 1 || claims.Count == 0))
         {
             return OfSeveral(content, file, subjects);
@@ -152,7 +152,11 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
 
     /// <summary>The content of a known arrival, read back from the archive: the object itself, or the member of it that has this hash.</summary>
     /// <exception cref="InvalidDataException">The archive does not hold it any more.</exception>
-    public ArrivalContent Read(Arrival arrival, string path) => Content(arrival, path, archive.Read(arrival.ObjectSha));
+    public ArrivalContent Read(Arrival arrival, string path) =>
+        LargeText.In(archive, arrival.ObjectSha, path) ?? Content(arrival, path, archive.Read(arrival.ObjectSha));
+
+    private DecodedFile DecodeFile(ArrivalContent content, bool salvages = false) =>
+        content.Open is { } open ? decoders.DecodeText(open) : decoders.Decode(content.Bytes, salvages);
 
     private ArrivalContent Content(Arrival arrival, string path, byte[] original) =>
         places.Find(arrival.ObjectSha, path, original, arrival.Sha)
@@ -161,14 +165,19 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     /// <summary>What a stored table holds.</summary>
     /// <exception cref="InvalidDataException">The archive does not hold it any more, or it is no table as layouts are now.</exception>
     public DecodedTable ReadTable(Arrival arrival) =>
-        decoders.Decode(Read(arrival, "").Bytes).Table ?? throw new InvalidDataException($"{arrival.Sha[..12]} is no table");
+        DecodeFile(Read(arrival, "")).Table ?? throw new InvalidDataException($"{arrival.Sha[..12]} is no table");
 
     /// <summary>The recordings of a stored arrival, read back from the archive; none where its original is missing or damaged.</summary>
     public IReadOnlyList<Recording> ReadRecordings(Arrival arrival)
     {
         try
         {
-            return originals.ReadWhole(arrival.ObjectSha) is { } bytes ? decoders.Decode(Content(arrival, "", bytes).Bytes, Salvages(arrival.Sha)).Recordings : [];
+            if (LargeText.In(archive, arrival.ObjectSha, "") is { } large)
+            {
+                return archive.Verify(arrival.ObjectSha) ? DecodeFile(large).Recordings : [];
+            }
+
+            return originals.ReadWhole(arrival.ObjectSha) is { } bytes ? DecodeFile(Content(arrival, "", bytes), Salvages(arrival.Sha)).Recordings : [];
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException or InvalidDataException)
         {

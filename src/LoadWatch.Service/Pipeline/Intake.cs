@@ -151,8 +151,13 @@ public sealed class Intake(
     }
 
     private IEnumerable<SeenContent> Contents(IEnumerable<TakenFile> taken) =>
-        taken.SelectMany(file => ArrivalContent.Expand(decoders, file.Copy.Sha, file.File.Path, file.Copy.Bytes)
+        taken.SelectMany(file => Contents(file)
             .Select(content => new SeenContent(content, new Origin(file.File.Inbox.Name, now, file.Stamp))));
+
+    /// <summary>What was not held is read from the archive, where it is durable by now.</summary>
+    private IEnumerable<ArrivalContent> Contents(TakenFile file) => file.Copy.Bytes.Length == file.Copy.Size
+        ? ArrivalContent.Expand(decoders, file.Copy.Sha, file.File.Path, file.Copy.Bytes)
+        : [LargeText.Of(file.Copy.Sha, file.File.Path, file.Copy.Size, () => archive.Open(file.Copy.Sha))];
 
     /// <summary>Every effect of the group is durable.</summary>
     private void Finish(WaitingGroup group)

@@ -14,7 +14,7 @@ public static class SeenContents
         foreach (var content in contents)
         {
             piece.Add(content);
-            bytes += content.Content.Bytes.Length;
+            bytes += content.Content.Size;
             if (piece.Count >= MostContents || bytes >= MostBytes)
             {
                 yield return piece;

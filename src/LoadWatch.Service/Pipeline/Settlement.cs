@@ -146,7 +146,7 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
     {
         foreach (var (content, origin) in seen.Where(item => item.Content.ParentSha is not null))
         {
-            session.Arrivals.AddWaiting(content.Sha, content.ParentSha, content.ParentSha!, content.Bytes.Length);
+            session.Arrivals.AddWaiting(content.Sha, content.ParentSha, content.ParentSha!, content.Size);
             if (origin is not null)
             {
                 session.Sightings.Upsert(origin.Inbox, content.Path, content.Sha, origin.FirstSeen, origin.Stamp);

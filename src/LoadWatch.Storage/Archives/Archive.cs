@@ -16,24 +16,25 @@ public sealed class Archive(DataFolder folder)
     /// Reads the source once: hashes it and writes a copy, which is on its way to the disk when this returns. It becomes durable and gets its name by
     /// <see cref="Commit"/>.
     /// </summary>
-    /// <param name="limitBytes">The most that is taken; at most 2 GB, since the bytes are kept in memory.</param>
+    /// <param name="limitBytes">The most that is taken; at most 2 GB where the bytes are held.</param>
+    /// <param name="isHeld">Whether the bytes are kept in memory, so that nobody reads them a second time.</param>
     /// <exception cref="SourceUnreadableException">The source failed; nothing is left behind.</exception>
     /// <exception cref="IOException">The disk failed; nothing is left behind.</exception>
-    public Staging Stage(Stream source, long limitBytes, CancellationToken cancel = default)
+    public Staging Stage(Stream source, long limitBytes, bool isHeld = true, CancellationToken cancel = default)
     {
         var temporary = TemporaryPath();
         var copy = PrivateFiles.CreateOnce(temporary);
-        var bytes = new RentedBytes(ExpectedBytes(source, limitBytes));
+        var bytes = new RentedBytes(isHeld ? ExpectedBytes(source, limitBytes) : BufferBytes);
         try
         {
-            if (CopyTo(copy, bytes, source, limitBytes, cancel) is not { } sha)
+            if (CopyTo(copy, bytes, source, limitBytes, isHeld, cancel) is not var (sha, size))
             {
                 Drop(copy, bytes, temporary);
                 return new OverLimit(limitBytes);
             }
 
             DurableFile.BeginSync(copy);
-            return new StagedCopy(sha, temporary, bytes, copy);
+            return new StagedCopy(sha, temporary, size, bytes, copy);
         }
         catch
         {
@@ -76,10 +77,13 @@ public sealed class Archive(DataFolder folder)
     public bool Exists(string sha) => File.Exists(PathOf(sha));
 
     /// <exception cref="FileNotFoundException">There is no such object.</exception>
-    public Stream Open(string sha) => new FileStream(PathOf(sha), FileMode.Open, FileAccess.Read, FileShare.Read);
+    public FileStream Open(string sha) => new FileStream(PathOf(sha), FileMode.Open, FileAccess.Read, FileShare.Read);
 
     /// <inheritdoc cref="Open"/>
     public byte[] Read(string sha) => File.ReadAllBytes(PathOf(sha));
+
+    /// <summary>Bytes of the object; null where there is none.</summary>
+    public long? SizeOf(string sha) => new FileInfo(PathOf(sha)) is { Exists: true } file ? file.Length : null;
 
     /// <summary>The object, read once; null where it is missing, cannot be read or no longer has the content it is named by.</summary>
     public byte[]? ReadWhole(string sha)
@@ -124,14 +128,16 @@ public sealed class Archive(DataFolder folder)
         return Path.Combine(folder.IncomingPath, string.Create(CultureInfo.InvariantCulture, $"{Environment.ProcessId}-{number}.part"));
     }
 
-    /// <returns>The SHA-256 of what was copied, or null where it is more than the limit.</returns>
-    private static string? CopyTo(FileStream copy, RentedBytes bytes, Stream source, long limitBytes, CancellationToken cancel)
+    /// <returns>The SHA-256 of what was copied and its bytes, or null where it is more than the limit.</returns>
+    private static (string Sha, long Size)? CopyTo(FileStream copy, RentedBytes bytes, Stream source, long limitBytes, bool isHeld, CancellationToken cancel)
     {
+        long size = 0;
         using var hash = IncrementalHash.CreateHash(HashAlgorithmName.SHA256);
         for (var read = ReadSource(source, bytes.Free(BufferBytes)); read > 0; read = ReadSource(source, bytes.Free(BufferBytes)))
         {
             cancel.ThrowIfCancellationRequested();
-            if (bytes.Length + read > limitBytes)
+            size += read;
+            if (size > limitBytes)
             {
                 return null;
             }
@@ -139,9 +145,13 @@ public sealed class Archive(DataFolder folder)
             var piece = bytes.Took(read);
             hash.AppendData(piece);
             copy.Write(piece);
+            if (!isHeld)
+            {
+                bytes.Forget();
+            }
         }
 
-        return Convert.ToHexStringLower(hash.GetHashAndReset());
+        return (Convert.ToHexStringLower(hash.GetHashAndReset()), size);
     }
 
     private static int ReadSource(Stream source, Span<byte> buffer)

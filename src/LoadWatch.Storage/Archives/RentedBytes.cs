@@ -49,6 +49,9 @@ internal sealed class RentedBytes : IDisposable
         return piece;
     }
 
+    /// <summary>The next bytes are put where these are.</summary>
+    public void Forget() => Length = 0;
+
     public void Dispose()
     {
         if (isRented)

@@ -11,13 +11,13 @@ public sealed record StagedCopy : Staging, IDisposable
     private readonly RentedBytes bytes;
     private readonly FileStream file;
 
-    internal StagedCopy(string sha, string temporaryPath, RentedBytes bytes, FileStream file)
+    internal StagedCopy(string sha, string temporaryPath, long size, RentedBytes bytes, FileStream file)
     {
         Sha = sha;
         TemporaryPath = temporaryPath;
         this.bytes = bytes;
         this.file = file;
-        Size = bytes.Length;
+        Size = size;
     }
 
     /// <summary>SHA-256 of the content, 64 lower-case hex digits.</summary>
@@ -28,7 +28,7 @@ public sealed record StagedCopy : Staging, IDisposable
     /// <summary>Bytes.</summary>
     public long Size { get; }
 
-    /// <summary>The content, so that nobody reads it a second time.</summary>
+    /// <summary>The content, so that nobody reads it a second time; empty where it was not to be held.</summary>
     /// <exception cref="ObjectDisposedException">Its memory is given back.</exception>
     public ReadOnlyMemory<byte> Bytes => bytes.Memory;
 

@@ -14,7 +14,7 @@ public sealed class ConfigurationReaderTests
 
         Assert.Equal(new RuleLimits(), read.Groups["squad"].Limits);
         Assert.Equal(("banister_trimp", 7), (read.Groups["squad"].LoadQuantity, Assert.Single(read.Contacts).BriefDays.Count));
-        Assert.Equal((Duration.FromSeconds(60), 32L * 1024 * 1024), (read.Settle, read.LargestFileBytes));
+        Assert.Equal((Duration.FromSeconds(60), 32L * 1024 * 1024, 512L * 1024 * 1024), (read.Settle, read.LargestFileBytes, read.LargestCsvBytes));
         Assert.Equal(["samples", "sessions", "sets", "tests", "days", "plan", "answers"], read.Layouts.Select(layout => layout.Name));
     }
 

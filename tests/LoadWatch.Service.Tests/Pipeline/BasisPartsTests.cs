@@ -12,7 +12,7 @@ public sealed class BasisPartsTests
 
     private static readonly string[] WithoutRows =
     [
-        "Folder", "Hash", "Text", "DataFolder", "PagesFolder", "NoticesFolder", "Contacts", "ScanEvery", "Settle", "LargestFileBytes", "Mail", "Webhook", "AllowNetworkDataFolder", "Administrators",
+        "Folder", "Hash", "Text", "DataFolder", "PagesFolder", "NoticesFolder", "Contacts", "ScanEvery", "Settle", "LargestFileBytes", "LargestCsvBytes", "Mail", "Webhook", "AllowNetworkDataFolder", "Administrators",
         "CommonLimits", // Part of those of the groups.
         "Subjects", // Of people, groups and devices.
     ];

@@ -82,7 +82,7 @@ public sealed class ArchiveTests : IDisposable
     [Fact]
     public void ASourceOverTheLimitIsToldSoAndLeavesNothing()
     {
-        var staged = archive.Stage(new MemoryStream(new byte[1001]), 1000, TestContext.Current.CancellationToken);
+        var staged = archive.Stage(new MemoryStream(new byte[1001]), 1000, cancel: TestContext.Current.CancellationToken);
 
         Assert.Equal(new OverLimit(1000), staged);
         Assert.Empty(Directory.GetFiles(folder.IncomingPath));
@@ -90,14 +90,14 @@ public sealed class ArchiveTests : IDisposable
 
     [Fact]
     public void ASourceAtTheLimitIsTaken() =>
-        Assert.IsType<StagedCopy>(archive.Stage(new MemoryStream(new byte[1000]), 1000, TestContext.Current.CancellationToken));
+        Assert.IsType<StagedCopy>(archive.Stage(new MemoryStream(new byte[1000]), 1000, cancel: TestContext.Current.CancellationToken));
 
     [Fact]
     public void ASourceOfManyBuffersIsCopiedWhole()
     {
         var bytes = Enumerable.Range(0, 1_000_003).Select(number => (byte)(number / 7 % 251)).ToArray();
 
-        var copy = Assert.IsType<StagedCopy>(archive.Stage(new MemoryStream(bytes), 2_000_000, TestContext.Current.CancellationToken));
+        var copy = Assert.IsType<StagedCopy>(archive.Stage(new MemoryStream(bytes), 2_000_000, cancel: TestContext.Current.CancellationToken));
         archive.Commit([copy]);
 
         Assert.Equal(Convert.ToHexStringLower(SHA256.HashData(bytes)), copy.Sha);
@@ -108,7 +108,7 @@ public sealed class ArchiveTests : IDisposable
     [Fact]
     public void ASourceThatFailsLeavesNothing()
     {
-        Assert.Throws<SourceUnreadableException>(() => archive.Stage(new FailingStream(), 1000, TestContext.Current.CancellationToken));
+        Assert.Throws<SourceUnreadableException>(() => archive.Stage(new FailingStream(), 1000, cancel: TestContext.Current.CancellationToken));
 
         Assert.Empty(Directory.GetFiles(folder.IncomingPath));
     }
@@ -116,7 +116,7 @@ public sealed class ArchiveTests : IDisposable
     [Fact]
     public void ACancelledCopyLeavesNothing()
     {
-        Assert.Throws<OperationCanceledException>(() => archive.Stage(new MemoryStream(new byte[10]), 1000, new CancellationToken(canceled: true)));
+        Assert.Throws<OperationCanceledException>(() => archive.Stage(new MemoryStream(new byte[10]), 1000, cancel: new CancellationToken(canceled: true)));
 
         Assert.Empty(Directory.GetFiles(folder.IncomingPath));
     }
@@ -165,9 +165,23 @@ public sealed class ArchiveTests : IDisposable
     public void ASourceThatDoesNotTellItsLengthIsCopiedWhole()
     {
         var bytes = Enumerable.Range(0, 3_000_001).Select(number => (byte)(number / 11 % 251)).ToArray();
-        using var copy = Assert.IsType<StagedCopy>(archive.Stage(new Unseekable(bytes), 4_000_000, TestContext.Current.CancellationToken));
+        using var copy = Assert.IsType<StagedCopy>(archive.Stage(new Unseekable(bytes), 4_000_000, cancel: TestContext.Current.CancellationToken));
         Assert.Equal(bytes, copy.Bytes.ToArray());
         Assert.Equal(bytes, File.ReadAllBytes(copy.TemporaryPath));
+    }
+
+    [Fact]
+    public void ACopyThatIsNotToBeHeldIsHashedAndWrittenAllTheSame()
+    {
+        var bytes = Enumerable.Range(0, 3_000_001).Select(number => (byte)(number / 11 % 251)).ToArray();
+        var sha = Convert.ToHexStringLower(System.Security.Cryptography.SHA256.HashData(bytes));
+        var copy = Assert.IsType<StagedCopy>(archive.Stage(new MemoryStream(bytes), 3_000_001, isHeld: false, TestContext.Current.CancellationToken));
+        Assert.Equal((sha, 3_000_001, 0), (copy.Sha, copy.Size, copy.Bytes.Length));
+        archive.Commit([copy]);
+        Assert.Equal(bytes, archive.ReadWhole(sha));
+        Assert.Equal(3_000_001, archive.SizeOf(sha));
+        Assert.Equal(new OverLimit(3_000_000), archive.Stage(new MemoryStream(bytes), 3_000_000, isHeld: false, TestContext.Current.CancellationToken));
+        Assert.Null(archive.SizeOf(ShaOfAbc));
     }
 
     [Fact]
@@ -178,7 +192,7 @@ public sealed class ArchiveTests : IDisposable
     }
 
     private StagedCopy Stage(string content) =>
-        Assert.IsType<StagedCopy>(archive.Stage(new MemoryStream(Encoding.UTF8.GetBytes(content)), 1000, TestContext.Current.CancellationToken));
+        Assert.IsType<StagedCopy>(archive.Stage(new MemoryStream(Encoding.UTF8.GetBytes(content)), 1000, cancel: TestContext.Current.CancellationToken));
 
     private sealed class Unseekable(byte[] bytes) : MemoryStream(bytes)
     {
