@@ -35,7 +35,8 @@ public static class ReplayCommand
     {
         using var workplace = Workplace.OpenToLook(configPath);
         var configuration = workplace.Configuration;
-        var others = OtherLimits.Read(file, configuration.Groups);
+        var others = OtherLimits.Read(file, configuration.Groups, configuration.People);
+        var own = OtherLimits.Read(configPath, configuration.Groups, configuration.People);
         if (!TryRead(words, configuration, out var marks))
         {
             return ExitCode.Usage;
@@ -60,9 +61,10 @@ public static class ReplayCommand
         var contacts = configuration.Contacts
             .Select(contact => (contact, (IReadOnlySet<string>)configuration.PeopleOf(contact).Select(person => person.Id).ToHashSet(StringComparer.Ordinal)))
             .ToList();
-        ReplayFigures Figures(Func<Group, RuleLimits> limits) => ReplayFigures.Of(
-            [.. cut.AsParallel().AsOrdered().Select(person => PersonReplay.Of(person, limits(person.Group)))], contacts, marks, first, last);
-        var comparison = new ReplayComparison(first, last, Figures(group => group.Limits), Figures(others.Of));
+        ReplayFigures Figures(Func<ReplayedPerson, RuleLimits> limits) => ReplayFigures.Of(
+            [.. cut.AsParallel().AsOrdered().Select(person => PersonReplay.Of(person, limits(person)))], contacts, marks, first, last);
+        var comparison = new ReplayComparison(
+            first, last, Figures(past => past.Group.Limits), Figures(past => others.Of(past.Person.Id, configuration.Groups[past.Group.Id], own)));
         Console.Out.Write(json ? comparison.Json() : comparison.Text());
         return ExitCode.Ok;
     }

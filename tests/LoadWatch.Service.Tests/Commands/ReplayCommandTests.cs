@@ -38,6 +38,25 @@ public sealed class ReplayCommandTests : IDisposable
         Assert.Contains("silence, notice", Replay(file).Output, StringComparison.Ordinal);
     }
 
+    /// <summary>Anna is the silent one, and her own limits say that she is watched: what a file says of all leaves that as it is, what it says of her does not.</summary>
+    [Theory]
+    [InlineData("""{ "limits": { "silence": { "enabled": false } } }""", 1)]
+    [InlineData("""{ "people": { "Anna": { "limits": { "silence": { "enabled": false } } } } }""", 0)]
+    public void LimitsOfOnePersonStayTheirOwn(string file, int raised)
+    {
+        var configuration = File.ReadAllText(folder.ConfigPath);
+        File.WriteAllText(folder.ConfigPath, configuration.Insert(configuration.IndexOf('{') + 1, """ "people": { "anna": { "limits": { "silence": { "enabled": true } } } }, """));
+
+        var (code, output, errors) = Replay(Write(file), "--json");
+
+        Assert.Equal((ExitCode.Ok, ""), (code, errors));
+        var root = JsonDocument.Parse(output).RootElement;
+        int Raised(string limits) => root.GetProperty(limits).GetProperty("raised").EnumerateArray().Sum(one => one.GetProperty("count").GetInt32());
+        Assert.Equal((1, raised), (Raised("today"), Raised("file")));
+        root = JsonDocument.Parse(Replay(folder.ConfigPath, "--json").Output).RootElement;
+        Assert.Equal(root.GetProperty("today").GetRawText(), root.GetProperty("file").GetRawText());
+    }
+
     [Fact]
     public void AWholeConfigurationIsARuleFileToo()
     {
@@ -52,6 +71,7 @@ public sealed class ReplayCommandTests : IDisposable
     [InlineData("""{ "limits": { "silnce": { "enabled": false } } }""", "\"silnce\" is not a key here")]
     [InlineData("""{ "limits": { "load_ratio": { "raise": 99 } } }""", "limits.load_ratio.raise")]
     [InlineData("""{ "limits": { "load_ratio": { "raise": 1.2, "return": 1.5 } } }""", "1.5 is above raise, which is 1.2")]
+    [InlineData("""{ "people": { "bo": { "limits": { "load_ratio": { "raise": 1.2, "return": 1.5 } } } } }""", "people.bo.limits.load_ratio.return: 1.5 is above raise, which is 1.2")]
     [InlineData("""{ "limits": """, "")]
     public void AWrongFileIsRefusedWithItsPlace(string text, string reason)
     {
