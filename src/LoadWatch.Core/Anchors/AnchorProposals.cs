@@ -24,10 +24,10 @@ internal static class AnchorProposals
 
     private const double PowerMaxError = 0.05;
 
-    /// <summary>A sprint holds most of its best second for three; one reading among others of less is a fault of the meter.</summary>
+    /// <summary>A sprint holds most of its best second for two; one reading among others of less is a fault of the meter.</summary>
     private const double SprintShare = 0.85;
 
-    private const int SprintSeconds = 3;
+    private const int SprintSeconds = 2;
 
     /// <summary>However well a line fits, what is measured is no surer than that.</summary>
     private const double LeastCriticalError = CapacityError.Measured;
