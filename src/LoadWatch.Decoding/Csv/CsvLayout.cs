@@ -29,7 +29,7 @@ public enum CsvKind
 }
 
 /// <summary>
-/// Describes one kind of CSV file, so that nothing about it is guessed. A file has a layout when its first line holds every name of
+/// Describes one kind of CSV file, so that nothing about it is guessed. A file has a layout when the line of its names holds every one of
 /// <see cref="Header"/>, the time column, the columns of start, date, person and quality that the layout names, and at least one channel
 /// column; of a table the date or time column and at least one column of <see cref="Fields"/> or <see cref="Wide"/>, if any is named there.
 /// Names are compared exactly, without the blanks around them.
@@ -61,6 +61,15 @@ public sealed record CsvLayout
     /// UTF-8, else Windows-1252. A byte order mark in the file goes before it.
     /// </summary>
     public string Encoding { get; init; } = CsvText.Auto;
+
+    /// <summary>
+    /// Lines at the start of the file that are passed over before the line of the column names, empty ones and <c>sep=;</c> counted, 0 to 200.
+    /// Default 0.
+    /// </summary>
+    public int LinesAbove { get; init; }
+
+    /// <summary>Lines below that of the column names that are passed over, such as one of units, 0 to 200. Default 0.</summary>
+    public int LinesBelow { get; init; }
 
     /// <summary>Where the time of a row stands. No default. Of a table: where the date stands in a moment.</summary>
     public CsvTimeColumn Time { get; init; } = new();

@@ -4,7 +4,7 @@ namespace LoadWatch.Decoding.Csv;
 
 /// <summary>A text with the names of its columns, read with one encoding and one separator.</summary>
 /// <param name="Separator">The one in use: a first line <c>sep=;</c> goes before the layout's.</param>
-/// <param name="RowsAbove">Rows up to the names, these included.</param>
+/// <param name="RowsAbove">Rows above the data: up to the names, these included, and those passed over below them.</param>
 /// <param name="Line">The line of the names; null without any.</param>
 /// <param name="Fault">Why the names could not be read, or null.</param>
 internal sealed record CsvTable(CsvText Text, char Separator, int RowsAbove, long? Line, IReadOnlyList<string> Names, Problem? Fault)
@@ -14,17 +14,29 @@ internal sealed record CsvTable(CsvText Text, char Separator, int RowsAbove, lon
     // A tracking export with every band of speed has some hundred.
     private const int ColumnsAtMost = 5_000;
 
-    public static CsvTable Open(CsvSource source, string encoding, char separator)
+    /// <param name="linesAbove">Lines at the start of the file that are passed over before the names; a first line <c>sep=;</c> is always one.</param>
+    /// <param name="linesBelow">Lines below the names that are passed over.</param>
+    public static CsvTable Open(CsvSource source, string encoding, char separator, int linesAbove, int linesBelow)
     {
         var text = CsvText.Of(source, encoding);
-        using var rows = new CsvRows(text, separator);
-        if (!rows.Next())
+        using (var rows = new CsvRows(text, separator))
         {
-            return new(text, separator, 0, null, [], rows.Fault ?? new Problem(ProblemSeverity.Error, "the file is empty", Line: 1));
+            if (!rows.Next())
+            {
+                return new(text, separator, 0, null, [], rows.Fault ?? new Problem(ProblemSeverity.Error, "the file is empty", Line: 1));
+            }
+
+            if (StatedSeparator(rows, separator) is { } stated)
+            {
+                (separator, linesAbove) = (stated, Math.Max(linesAbove, (int)rows.Line));
+            }
         }
 
-        return StatedSeparator(rows, separator) is { } stated ? OpenBelow(text, stated) : At(text, separator, rowsAbove: 1, rows);
+        return OpenBelow(text, separator, linesAbove, linesBelow);
     }
+
+    /// <summary>Lines above the names that a layout has to pass over.</summary>
+    public int LinesAbove { get; init; }
 
     /// <summary>The rows below the names.</summary>
     public CsvRows Rows()
@@ -66,18 +78,39 @@ internal sealed record CsvTable(CsvText Text, char Separator, int RowsAbove, lon
         return shown.Length == ShownCharacters || Names.Count > 50 ? shown + "..." : shown;
     }
 
-    private static CsvTable OpenBelow(CsvText text, char separator)
+    private static CsvTable OpenBelow(CsvText text, char separator, int linesAbove, int linesBelow)
     {
         using var rows = new CsvRows(text, separator);
-        rows.Next();
-        return rows.Next()
-            ? At(text, separator, rowsAbove: 2, rows)
-            : new(text, separator, 1, null, [], rows.Fault ?? new Problem(ProblemSeverity.Error, "no line of column names", Line: 2));
+        var passed = 0;
+        while (rows.Next())
+        {
+            passed++;
+            if (rows.Line > linesAbove)
+            {
+                return At(text, separator, passed, linesBelow, rows);
+            }
+        }
+
+        return new(text, separator, passed, null, [], rows.Fault ?? new Problem(ProblemSeverity.Error, "no line of column names", Line: linesAbove + 1));
     }
 
-    private static CsvTable At(CsvText text, char separator, int rowsAbove, CsvRows rows) => rows.CellCount > ColumnsAtMost
-        ? new(text, separator, rowsAbove, rows.Line, [], new Problem(ProblemSeverity.Error, $"more than {ColumnsAtMost} columns", Line: rows.Line))
-        : new(text, separator, rowsAbove, rows.Line, [.. Enumerable.Range(0, rows.CellCount).Select(rows.Text)], Fault: null);
+    private static CsvTable At(CsvText text, char separator, int rowsAbove, int linesBelow, CsvRows rows)
+    {
+        var line = rows.Line;
+        if (rows.CellCount > ColumnsAtMost)
+        {
+            return new(text, separator, rowsAbove, line, [], new Problem(ProblemSeverity.Error, $"more than {ColumnsAtMost} columns", Line: line));
+        }
+
+        IReadOnlyList<string> names = [.. Enumerable.Range(0, rows.CellCount).Select(rows.Text)];
+        var last = line + rows.LineSpan - 1 + linesBelow;
+        while (linesBelow > 0 && rows.Next() && rows.Line <= last)
+        {
+            rowsAbove++;
+        }
+
+        return new(text, separator, rowsAbove, line, names, Fault: null);
+    }
 
     /// <summary>Of a first line <c>sep=;</c>, whether or not the reader has cut it in two.</summary>
     private static char? StatedSeparator(CsvRows rows, char separator)

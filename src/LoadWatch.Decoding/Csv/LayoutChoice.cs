@@ -28,11 +28,11 @@ internal sealed record LayoutChoice(CsvLayout? Layout, CsvTable? Table, Problem?
     private static string? Unusable(CsvLayout layout) =>
         layout.Validate() is [var reason, ..] ? $"layout '{layout.Name}' cannot be used: {reason}" : null;
 
-    private static Dictionary<(string, char), CsvTable> Tables(CsvSource source, IReadOnlyList<CsvLayout> layouts) =>
-        layouts.Select(Dialect).Distinct().ToDictionary(
-            dialect => dialect, dialect => CsvTable.Open(source, dialect.Encoding, dialect.Delimiter));
+    private static Dictionary<(string, char, int, int), CsvTable> Tables(CsvSource source, IReadOnlyList<CsvLayout> layouts) =>
+        layouts.DistinctBy(Dialect).ToDictionary(Dialect, layout => CsvTable.Open(source, layout.Encoding, layout.Delimiter, layout.LinesAbove, layout.LinesBelow));
 
-    private static (string Encoding, char Delimiter) Dialect(CsvLayout layout) => (layout.Encoding, layout.Delimiter);
+    private static (string Encoding, char Delimiter, int LinesAbove, int LinesBelow) Dialect(CsvLayout layout) =>
+        (layout.Encoding, layout.Delimiter, layout.LinesAbove, layout.LinesBelow);
 
     private static bool Fits(CsvLayout layout, CsvTable table) =>
         layout.Kind == CsvKind.Samples ? FitsSamples(layout, table) : TableColumns.Fit(layout, table);

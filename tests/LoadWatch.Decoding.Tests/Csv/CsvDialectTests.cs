@@ -53,6 +53,40 @@ public class CsvDialectTests
         Assert.Equal("cycling", recording.Sport.Name);
     }
 
+    [Theory]
+    [InlineData("Mittaus 5.10.;Helmi\r\n\r\n\"Laite; 7\"\r\n", 3, 0)]
+    [InlineData("sep=;\r\nMittaus 5.10.\r\n", 2, 0)]
+    [InlineData("sep=;\r\n", 1, 0)]
+    [InlineData("Mittaus 5.10.\r\n", 1, 2)]
+    [InlineData("", 0, 1)]
+    public void LinesAroundTheNamesArePassedOverWhereTheLayoutSaysSo(string above, int linesAbove, int linesBelow)
+    {
+        var names = Text.IndexOf('\n') + 1;
+        var below = string.Concat(Enumerable.Repeat(";1/min;km/h;1/min\r\n", linesBelow));
+        var layout = CsvFiles.Finnish with { LinesAbove = linesAbove, LinesBelow = linesBelow };
+
+        var file = CsvFiles.Decode(above + Text[..names] + below + Text[names..], layout);
+
+        Assert.Empty(file.Problems);
+        Assert.Equal([142, 143], CsvFiles.Only(file).Samples[Channel.HeartRate].ToArray());
+    }
+
+    [Fact]
+    public void ALineThatTheLayoutDoesNotPassOverIsABadRowOnItsLine()
+    {
+        var file = CsvFiles.Decode("Mittaus\r\n" + Text.Replace("määrä\r\n", "määrä\r\n;1/min;km/h;1/min\r\n"), CsvFiles.Finnish with { LinesAbove = 1 });
+
+        Assert.Equal(3, Assert.Single(file.Problems, problem => problem.Column is not null).Line);
+    }
+
+    [Fact]
+    public void AFileThatEndsAboveItsNamesIsRefusedWithTheLine()
+    {
+        var problem = Assert.Single(CsvFiles.Decode(Text, CsvFiles.Finnish with { LinesAbove = 5 }).Problems);
+
+        Assert.Equal(("no line of column names", 6), (problem.Reason, problem.Line));
+    }
+
     [Fact]
     public void TheLayoutNamesTheSource()
     {

@@ -32,7 +32,7 @@ internal static class DialectStudy
     /// <summary>How many of the first rows have the number of cells that most have.</summary>
     private static (CsvTable Table, int Cells, double Share) Parting(CsvSource source, char delimiter)
     {
-        var table = CsvTable.Open(source, CsvText.Auto, delimiter);
+        var table = CsvTable.Open(source, CsvText.Auto, delimiter, linesAbove: 0, linesBelow: 0);
         if (table.Fault is not null)
         {
             return (table, 0, 0);
@@ -60,12 +60,13 @@ internal static class DialectStudy
                 continue;
             }
 
-            if (row > table.RowsAbove)
+            var linesAbove = row > table.RowsAbove ? (int)rows.Line - 1 : 0;
+            if (linesAbove > 0)
             {
-                notes.Doubt("header", $"the column names stand on line {rows.Line}, but are looked for on the first: export without the lines above them, or take those out");
+                notes.Doubt("lines_above", $"the column names stand on line {rows.Line}, and what is above is passed over: do they stand there in every such file?");
             }
 
-            return table with { RowsAbove = row, Line = rows.Line, Names = [.. Enumerable.Range(0, cells).Select(rows.Text)] };
+            return table with { LinesAbove = linesAbove, RowsAbove = row, Line = rows.Line, Names = [.. Enumerable.Range(0, cells).Select(rows.Text)] };
         }
 
         return table with { Fault = new Problem(ProblemSeverity.Error, "no line of column names: one is needed, since columns are told by their names", Line: 1) };

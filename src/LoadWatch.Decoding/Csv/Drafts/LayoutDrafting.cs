@@ -19,7 +19,8 @@ public static class LayoutDrafting
     private static LayoutDraft Of(CsvTable table, string name, DraftNotes notes)
     {
         var columns = table.Names.Select((column, index) => new ColumnStudy(column, index)).Where(column => column.Name.Length > 0).ToList();
-        if (RowStudy.Read(table, columns, notes) is { } fault)
+        var (fault, linesBelow) = RowStudy.Read(table, columns, notes);
+        if (fault is not null)
         {
             return LayoutDraft.Refused(fault);
         }
@@ -30,6 +31,8 @@ public static class LayoutDrafting
             Delimiter = table.Separator,
             Decimal = DecimalDraft.Of(columns, notes),
             Encoding = table.Text is { MarkLength: 0, Encoding: not null } ? CsvText.Windows1252 : CsvText.Auto,
+            LinesAbove = table.LinesAbove,
+            LinesBelow = linesBelow,
         };
         AskOfRepeatedNames(columns, notes);
         return new LayoutDraft(Signed(Filled(begun, columns, notes)), notes.Found, notes.Doubts, Problem: null);

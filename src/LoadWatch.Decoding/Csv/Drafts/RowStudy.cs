@@ -5,17 +5,21 @@ namespace LoadWatch.Decoding.Csv.Drafts;
 /// <summary>Shows every row of a file to the studies of its columns.</summary>
 internal static class RowStudy
 {
-    /// <returns>Why the file cannot be read to its end, or null.</returns>
-    public static Problem? Read(CsvTable table, IReadOnlyList<ColumnStudy> columns, DraftNotes notes)
+    /// <returns>Why the file cannot be read to its end, or null; and how many lines below the names are no data.</returns>
+    public static (Problem? Fault, int LinesBelow) Read(CsvTable table, IReadOnlyList<ColumnStudy> columns, DraftNotes notes)
     {
         using var rows = table.Rows();
         var (all, odd, first) = (0L, 0L, 0L);
+        var linesBelow = 0;
         while (rows.Next())
         {
-            if (all++ == 0 && TakeUnits(rows, columns, notes))
+            if (all == 0 && linesBelow == 0 && TakeUnits(rows, columns, notes))
             {
+                linesBelow = (int)(rows.Line - table.Line!.Value);
                 continue;
             }
+
+            all++;
 
             if (rows.CellCount != table.Names.Count || rows.IsQuotedWrongly)
             {
@@ -36,7 +40,7 @@ internal static class RowStudy
         }
 
         notes.Found.Add($"{all} rows below the names");
-        return rows.Fault ?? (all == odd ? new Problem(ProblemSeverity.Error, "no rows below the column names", Line: table.Line) : null);
+        return (rows.Fault ?? (all == odd ? new Problem(ProblemSeverity.Error, "no rows below the column names", Line: table.Line) : null), linesBelow);
     }
 
     /// <summary>A line of units below the names: no number in it, and some cell is a unit.</summary>
@@ -64,7 +68,7 @@ internal static class RowStudy
 
         if (units.Count > 0)
         {
-            notes.Doubt("header", $"line {rows.Line} holds units: they are used here, and the line will count as one bad row of each file");
+            notes.Doubt("lines_below", $"line {rows.Line} holds units: they are used here, and the line is passed over: does it stand there in every such file?");
         }
 
         return units.Count > 0;

@@ -176,7 +176,8 @@ public class LayoutDraftingTests
         var draft = Draft("time,speed,hr\n,km/h,bpm\n2026-10-05T06:00:00Z,12,100\n2026-10-05T06:00:01Z,13,101\n");
 
         Assert.Equal(["bpm", "km/h"], draft.Layout!.Columns.Select(column => column.Unit));
-        Assert.Contains(draft.Doubts, doubt => doubt.StartsWith("header: line 2 holds units", StringComparison.Ordinal));
+        Assert.Contains(draft.Doubts, doubt => doubt.StartsWith("lines_below: line 2 holds units", StringComparison.Ordinal));
+        Assert.Equal((0, 1), (draft.Layout.LinesAbove, draft.Layout.LinesBelow));
     }
 
     [Fact]
@@ -185,7 +186,8 @@ public class LayoutDraftingTests
         var draft = Draft("Export of Monday\n\ntime,hr,power\n2026-10-05T06:00:00Z,100,1\n2026-10-05T06:00:01Z,101,2\n");
 
         Assert.Equal(["time", "hr", "power"], draft.Layout!.Header);
-        Assert.Contains(draft.Doubts, doubt => doubt.StartsWith("header: the column names stand on line 3", StringComparison.Ordinal));
+        Assert.Contains(draft.Doubts, doubt => doubt.StartsWith("lines_above: the column names stand on line 3", StringComparison.Ordinal));
+        Assert.Equal((2, 0), (draft.Layout.LinesAbove, draft.Layout.LinesBelow));
     }
 
     [Fact]
