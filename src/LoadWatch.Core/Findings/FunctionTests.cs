@@ -1,6 +1,6 @@
 // Cut-offs: Cruz-Jentoft et al. 2019, Age Ageing 48:16-31 (EWGSOP2). Grip below 27 kg (men), 16 kg (women); five chair stands in more than 15 s; gait speed
 // of 0.8 m/s or less; timed up and go of 20 s or more; short physical performance battery of 8 points or fewer; 400 m walk in 360 s or more or not completed.
-// The chair stand, the battery and the walk are from memory. The numbers stand in FunctionTestLimits, the operators here.
+// The chair stand, the battery and the walk are from memory. Chair stands in 30 s have no cut-off there: that they were not done, or are overdue, is told. The numbers stand in FunctionTestLimits, the operators here.
 using LoadWatch.People;
 
 namespace LoadWatch.Findings;
@@ -35,6 +35,7 @@ public static class FunctionTests
 {
     public const string Grip = "grip_strength";
     public const string ChairStands = "chair_stands_5";
+    public const string ChairStandsIn30Seconds = "chair_stands_30_s";
     public const string Gait = "gait_speed";
     public const string UpAndGo = "timed_up_and_go";
     public const string PerformanceBattery = "short_physical_performance_battery";
@@ -44,6 +45,7 @@ public static class FunctionTests
     [
         new(Grip, "Grip strength", "kg", true, GripLimit, (value, limit) => value < limit, "below", limits => limits.GripKilograms),
         new(ChairStands, "Five chair stands", "s", false, (limits, _) => limits.ChairStandCutOffSeconds, (value, limit) => value > limit, "above", limits => limits.ChairStandSeconds),
+        new(ChairStandsIn30Seconds, "Chair stands in 30 s", "count", true, (_, _) => null, (_, _) => false, "below", _ => null),
         new(Gait, "Gait speed", "m/s", true, (limits, _) => limits.GaitCutOffMetresPerSecond, (value, limit) => value <= limit, "at or below", limits => limits.GaitMetresPerSecond),
         new(UpAndGo, "Timed up and go", "s", false, (limits, _) => limits.UpAndGoCutOffSeconds, (value, limit) => value >= limit, "at or above", limits => limits.UpAndGoSeconds),
         new(

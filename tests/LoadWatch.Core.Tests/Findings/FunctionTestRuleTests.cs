@@ -62,6 +62,17 @@ public class FunctionTestRuleTests
         Assert.Equal(("value", null, "on 2026-01-08, could not be done"), finding.Evidence.Inputs[0] is var item ? (item.Name, item.Value, item.Note) : default);
     }
 
+    [Fact]
+    public void ChairStandsInThirtySecondsHaveNoCutOffButAreToldWhereTheyCouldNotBeDone()
+    {
+        var unable = new DatedTest(On(10), new TestRow("chair_stands_30_s", null, null, null, null, TestOutcome.Unable, null, null, 0.43));
+
+        var findings = Evaluate(Sex.Female, Test(3, "chair_stands_30_s", 14), Test(5, "chair_stands_30_s", 1), unable);
+
+        Assert.Equal("Chair stands in 30 s on 15 January: could not be done.", findings[0].Text);
+        Assert.Equal(On(10), findings[0].Date);
+    }
+
     /// <summary>The limit is the one that was passed: nine seconds and the error of 2.5, not the cut-off of 15.</summary>
     [Fact]
     public void AFallIsToldWithItsOwnLimit()
