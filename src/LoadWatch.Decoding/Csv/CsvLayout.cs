@@ -1,3 +1,4 @@
+using System.ComponentModel.DataAnnotations;
 using System.Diagnostics.CodeAnalysis;
 using LoadWatch.Recordings;
 
@@ -66,9 +67,11 @@ public sealed record CsvLayout
     /// Lines at the start of the file that are passed over before the line of the column names, empty ones and <c>sep=;</c> counted, 0 to 200.
     /// Default 0.
     /// </summary>
+    [Range(0, 200)]
     public int LinesAbove { get; init; }
 
     /// <summary>Lines below that of the column names that are passed over, such as one of units, 0 to 200. Default 0.</summary>
+    [Range(0, 200)]
     public int LinesBelow { get; init; }
 
     /// <summary>Where the time of a row stands. No default. Of a table: where the date stands in a moment.</summary>

@@ -16,8 +16,6 @@ internal static class CsvLayoutCheck
         .. TableLayoutCheck.OfTablesOnly(layout),
     ];
 
-    private const int LinesAtMost = 200;
-
     private static IEnumerable<string> Basics(CsvLayout layout)
     {
         if (string.IsNullOrWhiteSpace(layout.Name))
@@ -38,16 +36,6 @@ internal static class CsvLayoutCheck
         if (!CsvText.Knows(layout.Encoding))
         {
             yield return $"encoding '{layout.Encoding}' is not known: use {CsvText.Names}";
-        }
-
-        if (layout.LinesAbove is < 0 or > LinesAtMost)
-        {
-            yield return $"lines_above must be 0 to {LinesAtMost}";
-        }
-
-        if (layout.LinesBelow is < 0 or > LinesAtMost)
-        {
-            yield return $"lines_below must be 0 to {LinesAtMost}";
         }
     }
 

@@ -26,8 +26,6 @@ public class CsvLayoutTests
         { Good with { Delimiter = 'ä' }, "delimiter must be one of" },
         { Good with { Delimiter = '\n' }, "delimiter must be one of" },
         { Good with { Decimal = '\'' }, "decimal must be . or ," },
-        { Good with { LinesAbove = -1 }, "lines_above must be 0 to 200" },
-        { Good with { LinesBelow = 201 }, "lines_below must be 0 to 200" },
         { Good with { Encoding = "latin-9" }, "encoding 'latin-9' is not known" },
         { Good with { Time = new CsvTimeColumn() }, "time.column is missing" },
         { Good with { Time = Good.Time with { Zone = "Europe/Nowhere" } }, "time.zone 'Europe/Nowhere' is not an IANA zone" },
