@@ -38,6 +38,9 @@ internal sealed record CsvTable(CsvText Text, char Separator, int RowsAbove, lon
     /// <summary>Lines above the names that a layout has to pass over.</summary>
     public int LinesAbove { get; init; }
 
+    /// <summary>The line on which the names end: a later one than theirs where a quoted name holds line ends.</summary>
+    public long LastLine { get; init; }
+
     /// <summary>The rows below the names.</summary>
     public CsvRows Rows()
     {
@@ -103,13 +106,13 @@ internal sealed record CsvTable(CsvText Text, char Separator, int RowsAbove, lon
         }
 
         IReadOnlyList<string> names = [.. Enumerable.Range(0, rows.CellCount).Select(rows.Text)];
-        var last = line + rows.LineSpan - 1 + linesBelow;
-        while (linesBelow > 0 && rows.Next() && rows.Line <= last)
+        var last = line + rows.LineSpan - 1;
+        while (linesBelow > 0 && rows.Next() && rows.Line <= last + linesBelow)
         {
             rowsAbove++;
         }
 
-        return new(text, separator, rowsAbove, line, names, Fault: null);
+        return new(text, separator, rowsAbove, line, names, Fault: null) { LastLine = last };
     }
 
     /// <summary>Of a first line <c>sep=;</c>, whether or not the reader has cut it in two.</summary>

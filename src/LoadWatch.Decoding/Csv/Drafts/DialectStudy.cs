@@ -66,7 +66,7 @@ internal static class DialectStudy
                 notes.Doubt("lines_above", $"the column names stand on line {rows.Line}, and what is above is passed over: do they stand there in every such file?");
             }
 
-            return table with { LinesAbove = linesAbove, RowsAbove = row, Line = rows.Line, Names = [.. Enumerable.Range(0, cells).Select(rows.Text)] };
+            return table with { LinesAbove = linesAbove, RowsAbove = row, Line = rows.Line, LastLine = rows.Line + rows.LineSpan - 1, Names = [.. Enumerable.Range(0, cells).Select(rows.Text)] };
         }
 
         return table with { Fault = new Problem(ProblemSeverity.Error, "no line of column names: one is needed, since columns are told by their names", Line: 1) };

@@ -15,12 +15,11 @@ internal static class RowStudy
         {
             if (all == 0 && linesBelow == 0 && TakeUnits(rows, columns, notes))
             {
-                linesBelow = (int)(rows.Line - table.Line!.Value);
+                linesBelow = (int)(rows.Line - table.LastLine);
                 continue;
             }
 
             all++;
-
             if (rows.CellCount != table.Names.Count || rows.IsQuotedWrongly)
             {
                 first = odd == 0 ? rows.Line : first;

@@ -181,6 +181,14 @@ public class LayoutDraftingTests
     }
 
     [Fact]
+    public void ALineOfUnitsIsCountedFromTheEndOfNamesThatTakeTwoLines()
+    {
+        var draft = Draft("time,\"speed\nof the boat\",hr\n,km/h,bpm\n2026-10-05T06:00:00Z,12,100\n2026-10-05T06:00:01Z,13,101\n");
+
+        Assert.Equal((0, 1), (draft.Layout!.LinesAbove, draft.Layout.LinesBelow));
+    }
+
+    [Fact]
     public void LinesAboveTheNamesAreNamed()
     {
         var draft = Draft("Export of Monday\n\ntime,hr,power\n2026-10-05T06:00:00Z,100,1\n2026-10-05T06:00:01Z,101,2\n");
