@@ -1,6 +1,8 @@
 // Cut-offs: Cruz-Jentoft et al. 2019, Age Ageing 48:16-31 (EWGSOP2). Grip below 27 kg (men), 16 kg (women); five chair stands in more than 15 s; gait speed
 // of 0.8 m/s or less; timed up and go of 20 s or more; short physical performance battery of 8 points or fewer; 400 m walk in 360 s or more or not completed.
-// The chair stand, the battery and the walk are from memory. Chair stands in 30 s have no cut-off there: that they were not done, or are overdue, is told. The numbers stand in FunctionTestLimits, the operators here.
+// The chair stand, the battery and the walk are from memory. Chair stands in 30 s have no cut-off there: that they were not
+// done, or are overdue, is told. The numbers stand in FunctionTestLimits, the operators here.
+using LoadWatch.Loads;
 using LoadWatch.People;
 
 namespace LoadWatch.Findings;
@@ -34,8 +36,8 @@ public sealed record FunctionTest(
 public static class FunctionTests
 {
     public const string Grip = "grip_strength";
-    public const string ChairStands = "chair_stands_5";
-    public const string ChairStandsIn30Seconds = "chair_stands_30_s";
+    public const string ChairStands = SitToStandPower.FiveRises;
+    public const string ChairStandsIn30Seconds = SitToStandPower.RisesInThirtySeconds;
     public const string Gait = "gait_speed";
     public const string UpAndGo = "timed_up_and_go";
     public const string PerformanceBattery = "short_physical_performance_battery";

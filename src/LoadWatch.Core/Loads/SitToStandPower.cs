@@ -1,4 +1,3 @@
-using LoadWatch.Findings;
 using LoadWatch.Rows;
 
 namespace LoadWatch.Loads;
@@ -10,6 +9,9 @@ namespace LoadWatch.Loads;
 /// </summary>
 public static class SitToStandPower
 {
+    public const string FiveRises = "chair_stands_5";
+    public const string RisesInThirtySeconds = "chair_stands_30_s";
+
     private const double Gravity = 9.81;
     private const double LiftedShare = 0.9;
     private const double RisingShare = 0.5;
@@ -31,8 +33,8 @@ public static class SitToStandPower
     private static double? SecondsOfARise(TestRow test) => test switch
     {
         { Outcome: not null } => null,
-        { Test: FunctionTests.ChairStands, Value: > 0 and var seconds } => seconds / 5,
-        { Test: FunctionTests.ChairStandsIn30Seconds, Value: >= 1 and var rises } => 30 / rises,
+        { Test: FiveRises, Value: > 0 and var seconds } => seconds / 5,
+        { Test: RisesInThirtySeconds, Value: >= 1 and var rises } => 30 / rises,
         _ => null,
     };
 }

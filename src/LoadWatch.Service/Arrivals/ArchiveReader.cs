@@ -30,36 +30,19 @@ public sealed class ArchiveReader(Store store, Archive archive, DecoderSet decod
     /// <summary>Gives the contents under a path; null where the original is missing or damaged.</summary>
     private Func<string, IEnumerable<ArrivalContent>>? Expansion(string objectSha)
     {
-        if (LargeTextIn(objectSha) is { } large)
+        try
         {
-            return IsWhole(objectSha) ? path => [large with { Path = path }] : null;
+            if (LargeText.In(archive, objectSha, "") is { } large)
+            {
+                return archive.Verify(objectSha) ? path => [large with { Path = path }] : null;
+            }
+        }
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+        {
+            return null;
         }
 
         return archive.ReadWhole(objectSha) is { } bytes ? path => ArrivalContent.Expand(decoders, objectSha, path, bytes) : null;
-    }
-
-    private ArrivalContent? LargeTextIn(string objectSha)
-    {
-        try
-        {
-            return LargeText.In(archive, objectSha, "");
-        }
-        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
-        {
-            return null; // Reading it whole says so too.
-        }
-    }
-
-    private bool IsWhole(string objectSha)
-    {
-        try
-        {
-            return archive.Verify(objectSha);
-        }
-        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
-        {
-            return false;
-        }
     }
 
     private string? KeptIn(string sha) => store.Read(session => session.Arrivals.Get(sha))?.ObjectSha;

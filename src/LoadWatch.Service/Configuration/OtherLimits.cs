@@ -29,8 +29,8 @@ public sealed class OtherLimits
             faults.Stop();
             var limits = new OtherLimits(document.RootElement.Clone());
             var places = limits.Places(groups).Select(place => (Limits: limits.Of(place.Group), place.At))
-                .Concat(limits.Own(people).Select(own => (limits.Of(own.Id, groups[people[own.Id].Group], limits), own.At)));
-            foreach (var (at, reason) in places.SelectMany(place => Faults(place.Item1, place.Item2)).Distinct())
+                .Concat(limits.Own(people).Select(own => (Limits: limits.Of(own.Id, groups[people[own.Id].Group], limits), own.At)));
+            foreach (var (at, reason) in places.SelectMany(place => Faults(place.Limits, place.At)).Distinct())
             {
                 faults.Add(at, reason);
             }
