@@ -10,7 +10,7 @@ namespace LoadWatch.Anchors;
 public sealed record AnchorContradiction(ObservedAnchor Observed, Anchor Measured)
 {
     /// <summary>Whose line lies below this share of the measured one has not gone to the limit, rather than lost so much. A choice.</summary>
-    private const double ReachWanted = 0.8;
+    internal const double ReachWanted = 0.8;
 
     /// <summary>
     /// Those that hold on a date, in the order of the kinds. A regression may contradict either way, a lower one only where it reaches 80 % of the measured line; a best

@@ -29,11 +29,6 @@ internal static class AnchorProposals
 
     private const int SprintSeconds = 2;
 
-    /// <summary>However well a line fits, what is measured is no surer than that.</summary>
-    private const double LeastCriticalError = CapacityError.Measured;
-
-    private const double LeastReserveError = 0.10;
-
     /// <summary>Each entry stands and falls as one.</summary>
     public static IEnumerable<IReadOnlyList<ObservedAnchor>> Of(
         Person person, HeartRateMaxEquation byAge, LocalDate month, IReadOnlyList<SessionBests> sessions, IReadOnlyList<ShownMaximum> maxima) =>
@@ -45,13 +40,12 @@ internal static class AnchorProposals
             .Select(same => OneRepetition(person.Id, month, [.. same])),
     ];
 
-    /// <summary>On foot power is a model of the watch; on an electric bicycle it may be the motor's.</summary>
     private static IEnumerable<IGrouping<string, SessionBests>> OfPower(IEnumerable<SessionBests> sessions) => sessions
-        .Where(session => session.Means.ContainsKey(Channel.Power) && !session.Sport.IsOnFoot && session.Sport is { Family: not "running", Name: not "e_biking" })
+        .Where(session => session.Means.ContainsKey(Channel.Power) && SessionBests.CriticalSport(session.Sport, Channel.Power) is not null)
         .GroupBy(session => session.Sport.Family, StringComparer.Ordinal)
         .OrderBy(sport => sport.Key, StringComparer.Ordinal);
 
-    private static bool IsRun(SessionBests session) => session.Sport.Family == "running" && session.Means.ContainsKey(Channel.Speed);
+    private static bool IsRun(SessionBests session) => SessionBests.CriticalSport(session.Sport, Channel.Speed) is not null && session.Means.ContainsKey(Channel.Speed);
 
     /// <summary>
     /// The highest heart rate held for 15 s that two sessions reached. Of those who never go to their limit it lies below the true one; so it is taken only above what age
@@ -89,8 +83,8 @@ internal static class AnchorProposals
         var basis = FormattableString.Invariant(
             $"{done} on time, {choice.Trials.Count} bests of {choice.Trials[0].Trial.Seconds:0} to {choice.Trials[^1].Trial.Seconds:0} s from {choice.Trials.DistinctBy(one => one.Session).Count()} sessions");
         return Plausible(
-            new ObservedAnchor(person, critical, month, fit.Critical, Math.Max(fit.CriticalError!.Value, LeastCriticalError * fit.Critical), shown, basis) { Sport = sport },
-            new ObservedAnchor(person, reserve, month, fit.Reserve, Math.Max(fit.ReserveError!.Value, LeastReserveError * fit.Reserve), shown, basis) { Sport = sport });
+            new ObservedAnchor(person, critical, month, fit.Critical, choice.CriticalError!.Value, shown, basis) { Sport = sport },
+            new ObservedAnchor(person, reserve, month, fit.Reserve, choice.ReserveError!.Value, shown, basis) { Sport = sport });
     }
 
     private static IReadOnlyList<ObservedAnchor> PowerMax(string person, LocalDate month, string sport, IReadOnlyList<SessionBests> sessions)

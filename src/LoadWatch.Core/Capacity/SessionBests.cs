@@ -9,6 +9,21 @@ namespace LoadWatch.Capacity;
 /// <param name="Means">Of power, speed and heart rate, where usable.</param>
 public sealed record SessionBests(string Key, LocalDate Date, Sport Sport, IReadOnlyDictionary<Channel, BestMeans> Means)
 {
+    /// <summary>
+    /// The kind of movement whose critical power, or speed, its bests may tell; null: none. On foot power is a model of the watch; on an electric bicycle it may be the
+    /// motor's; speed counts on foot alone, since on wheels wind and slope make it.
+    /// </summary>
+    public static string? CriticalSport(Sport sport, Channel channel)
+    {
+        ArgumentNullException.ThrowIfNull(sport);
+        return channel switch
+        {
+            Channel.Power => sport is { IsOnFoot: false, Family: not "running", Name: not "e_biking" } ? sport.Family : null,
+            Channel.Speed => sport.Family == "running" ? sport.Family : null,
+            _ => null,
+        };
+    }
+
     /// <summary>The best mean of a channel over so many seconds, or null.</summary>
     public double? Best(Channel channel, int seconds) => Means.TryGetValue(channel, out var means) ? means[seconds] : null;
 }

@@ -8,6 +8,7 @@
 // Durations of 2 to 15, at most 30 minutes are those for which the line holds (Monod and Scherrer 1965; Moritani et al. 1981). All numbers are choices.
 using System.Globalization;
 using LoadWatch.Recordings;
+using LoadWatch.Stimulus;
 using NodaTime;
 
 namespace LoadWatch.Capacity;
@@ -34,14 +35,30 @@ public sealed record TrialChoice(IReadOnlyList<ChosenTrial> Trials, CapacityFit?
     /// <summary>Corners flatter than that are the last digits of one line.</summary>
     private const double Flat = 1e-6;
 
+    /// <summary>However well a line fits, what is measured is no surer than that. Share of the value.</summary>
+    private const double LeastCriticalError = CapacityError.Measured;
+
+    private const double LeastReserveError = 0.10;
+
     /// <summary>The shortest and the longest duration that is looked at, s.</summary>
     public static IReadOnlyList<int> Span { get; } = [ShortestSeconds, LongestSeconds];
 
+    /// <summary>Standard error of the critical value, W or m/s, at least 2 % of it; null where refused.</summary>
+    public double? CriticalError => Fit is null ? null : Math.Max(Fit.CriticalError!.Value, LeastCriticalError * Fit.Critical);
+
+    /// <summary>Standard error of the reserve, J or m, at least 10 % of it; null where refused.</summary>
+    public double? ReserveError => Fit is null ? null : Math.Max(Fit.ReserveError!.Value, LeastReserveError * Fit.Reserve);
+
+    /// <summary>All durations that are looked at, s, rising.</summary>
+    internal static IReadOnlyList<int> Durations { get; } = [.. BestMeans.Durations.Where(seconds => seconds is >= ShortestSeconds and <= LongestSeconds)];
+
     /// <param name="sessions">Of one person and one kind of movement, in any order.</param>
     /// <param name="channel">Power, or speed.</param>
-    public static TrialChoice Of(IReadOnlyCollection<SessionBests> sessions, Channel channel)
+    public static TrialChoice Of(IReadOnlyCollection<SessionBests> sessions, Channel channel) => Of(new TrialEnvelopes(sessions, channel).Of(null, null), channel);
+
+    /// <param name="envelope">As <see cref="TrialEnvelopes"/> tells it.</param>
+    internal static TrialChoice Of(IReadOnlyList<ChosenTrial> envelope, Channel channel)
     {
-        var envelope = Envelope(sessions, channel);
         if (envelope.Count == 0)
         {
             return Refused("no session with an unbroken stretch of 2 minutes or more");
@@ -66,21 +83,8 @@ public sealed record TrialChoice(IReadOnlyList<ChosenTrial> Trials, CapacityFit?
 
     private static TrialChoice Refused(string reason) => new([], null, reason);
 
-    /// <summary>For each duration the best of all sessions; of equal ones the earliest.</summary>
-    private static List<ChosenTrial> Envelope(IReadOnlyCollection<SessionBests> sessions, Channel channel) =>
-    [
-        .. BestMeans.Durations
-            .Where(seconds => seconds is >= ShortestSeconds and <= LongestSeconds)
-            .Select(seconds => sessions
-                .Where(session => session.Best(channel, seconds) is > 0)
-                .Select(session => new ChosenTrial(Trial.OfMean(seconds, session.Best(channel, seconds)!.Value), session.Key, session.Date))
-                .OrderByDescending(one => one.Trial.Mean).ThenBy(one => one.Date).ThenBy(one => one.Session, StringComparer.Ordinal)
-                .FirstOrDefault())
-            .OfType<ChosenTrial>(),
-    ];
-
     /// <summary>The corners of the upper hull of what was done on time.</summary>
-    private static List<ChosenTrial> Hull(List<ChosenTrial> envelope)
+    private static List<ChosenTrial> Hull(IReadOnlyList<ChosenTrial> envelope)
     {
         var hull = new List<ChosenTrial>();
         foreach (var next in envelope)
@@ -107,7 +111,7 @@ public sealed record TrialChoice(IReadOnlyList<ChosenTrial> Trials, CapacityFit?
     }
 
     /// <summary>What of the envelope lies on the hull or next to it.</summary>
-    private static List<ChosenTrial> Near(List<ChosenTrial> hull, List<ChosenTrial> envelope) =>
+    private static List<ChosenTrial> Near(List<ChosenTrial> hull, IReadOnlyList<ChosenTrial> envelope) =>
     [
         .. envelope.Where(one =>
         {

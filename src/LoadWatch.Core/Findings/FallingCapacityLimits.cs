@@ -28,6 +28,14 @@ public sealed record FallingCapacityLimits : IDelayedLimits
     [Range(1.0, 50.0)]
     public double OneRepetitionMaxPercent { get; init; } = 14;
 
+    /// <summary>Fall of critical power, or critical speed, that matters. A choice. Percent.</summary>
+    [Range(1.0, 50.0)]
+    public double CriticalPercent { get; init; } = 5;
+
+    /// <summary>Fall of critical power, or critical speed, that its error leaves sure: both limits are to be passed. A choice. Combined standard errors.</summary>
+    [Range(1.0, 10.0)]
+    public double CriticalErrors { get; init; } = 2;
+
     /// <summary>Over when the fall is this share of the error, or less. A choice. 0 to 1.</summary>
     [Range(0.0, 1.0)]
     public double ReturnShare { get; init; } = 0.7;

@@ -15,19 +15,27 @@ internal sealed class FallingCapacityRecord : RuleRecord
 
     public override string Ends => "The fall is clearly within the error again, read on recorded days.";
 
-    public override string DataNeeded => "Sessions with the quantity in both stretches, of one sport.";
+    public override string DataNeeded =>
+        "Sessions with the quantity in both stretches, of one sport; for critical power and speed bests of 2 to 20 min that may have been all out, with heart rate, of 3 sessions in each.";
 
     public override string Basis =>
-        "Stretches and errors of speed and power are a choice; the error of an estimated maximum is 10.6 to 13.5 % of the mean in direct tests.";
+        "Stretches and errors of speed and power are a choice; the error of an estimated maximum is 10.6 to 13.5 % of the mean in direct tests; critical power and speed: Monod and Scherrer 1965, Moritani et al. 1981, with standard errors of the line.";
 
     public override int Rank => 8;
 
-    public override string Counted(FindingKey key) => "with a best of late below the best before";
+    public override string Counted(FindingKey key) =>
+        CriticalQuantity.Of(key.Quantity) is { } critical ? $"with {critical.Words} of late below the value before" : "with a best of late below the best before";
 
-    public override string Named(FindingKey key, bool self) => $"{KeyWords.Best(key)} of late below {KeyWords.Your(self)} best before";
+    public override string Named(FindingKey key, bool self) => CriticalQuantity.Of(key.Quantity) is { } critical
+        ? $"{critical.Words} of late below {KeyWords.Your(self)} value before"
+        : $"{KeyWords.Best(key)} of late below {KeyWords.Your(self)} best before";
 
-    public override string Response(FindingKey key, bool self) => "whether an all-out try was made lately; if so, what else went on, before changing anything.";
+    public override string Response(FindingKey key, bool self) => CriticalQuantity.Of(key.Quantity) is null
+        ? "whether an all-out try was made lately; if so, what else went on, before changing anything."
+        : "whether efforts of late were all out, short and long ones; if so, what else went on, before changing anything.";
 
     public override string Returned(FindingKey key, RuleLimits limits, bool self) =>
-        $"{KeyWords.Best(key)} is no longer below the best before";
+        CriticalQuantity.Of(key.Quantity) is { } critical
+            ? $"{critical.Words} is no longer below the value before"
+            : $"{KeyWords.Best(key)} is no longer below the best before";
 }

@@ -9,12 +9,15 @@ using NodaTime;
 namespace LoadWatch.Findings;
 
 /// <summary>
-/// A best has gone down: top speed, top power, the estimated maximum of an exercise. Off in the off-season, in absence and return. It compares what was shown,
+/// A best has gone down: top speed, top power, the estimated maximum of an exercise; or what bests of several durations tell, critical power and critical speed
+/// (<see cref="CriticalFalls"/>). Off in the off-season, in absence and return. It compares what was shown,
 /// not what could be: whoever has not tried shows less. Read on recorded days only: time alone neither raises nor ends it (I-6).
 /// </summary>
 public sealed class FallingCapacityRule : IRule
 {
-    public string Name => "falling_capacity";
+    public const string Word = "falling_capacity";
+
+    public string Name => Word;
 
     public RuleRecord Record { get; } = new FallingCapacityRecord();
 
@@ -27,9 +30,11 @@ public sealed class FallingCapacityRule : IRule
         var shown = subject.Activities.SelectMany(activity => ShownBy(activity, limits, faults)).ToLookup(one => one.Quantity.Name, StringComparer.Ordinal);
         return shown.Select(one => one.Key)
             .Concat(subject.Memory.KeysBefore.Where(key => key.StartsWith(KeyOf(""), StringComparison.Ordinal)).Select(key => key[KeyOf("").Length..]))
+            .Where(quantity => CriticalQuantity.Of(quantity) is null)
             .Distinct(StringComparer.Ordinal)
             .Order(StringComparer.Ordinal)
-            .SelectMany(quantity => Evaluate(subject, quantity, [.. shown[quantity].OrderBy(one => one.Date)], Percent(quantity, limits)!.Value));
+            .SelectMany(quantity => Evaluate(subject, quantity, [.. shown[quantity].OrderBy(one => one.Date)], Percent(quantity, limits)!.Value))
+            .Concat(CriticalQuantity.All.SelectMany(quantity => new CriticalFalls(subject, quantity, Name, KeyOf(quantity.Name)).Evaluate()));
     }
 
     private string KeyOf(string quantity) => $"{Name}/{quantity}";

@@ -1,8 +1,10 @@
 using LoadWatch.Activities;
+using LoadWatch.Capacity;
 using LoadWatch.Days;
 using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Plans;
+using LoadWatch.Recordings;
 using LoadWatch.Rows;
 using NodaTime;
 
@@ -33,6 +35,12 @@ public sealed record RuleSubject(Person Person, IReadOnlyList<Day> Days, RuleLim
 
     /// <summary>What counts of the person's training up to the last day, by date, then key; from the look-back before <see cref="From"/> on.</summary>
     public IReadOnlyList<JoinedActivity> Activities { get; init; } = [];
+
+    /// <summary>
+    /// Best means of heart rate, power and speed by key of the activity, of the activities from two stretches of <see cref="FallingCapacityLimits.Days"/> before <see cref="From"/> on;
+    /// empty where nothing is recorded on a date to judge.
+    /// </summary>
+    public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> BestMeans { get; init; } = new Dictionary<string, IReadOnlyDictionary<Channel, BestMeans>>();
 
     public PersonPlan Plan { get; init; } = PersonPlan.None;
 

@@ -28,10 +28,11 @@ internal sealed class SensorFaults(RuleSubject subject)
 
     /// <summary>Whether a quantity of a session was read from a channel that is of no use. A load that something else stands in for was not.</summary>
     public bool Mutes(JoinedActivity activity, string quantity) =>
-        limits.Enabled
-        && ChannelOf(quantity) is { } channel
-        && Poor(subject.Person, activity, limits.UsableShare).Any(poor => poor.Key == channel)
-        && activity[quantity] is not null;
+        ChannelOf(quantity) is { } channel && Mutes(activity, channel) && activity[quantity] is not null;
+
+    /// <summary>Whether a channel of a session is of no use.</summary>
+    public bool Mutes(JoinedActivity activity, Channel channel) =>
+        limits.Enabled && Poor(subject.Person, activity, limits.UsableShare).Any(poor => poor.Key == channel);
 
     /// <summary>Whether the group's load of a date rests on such a session.</summary>
     public bool MuteLoadOf(LocalDate date)

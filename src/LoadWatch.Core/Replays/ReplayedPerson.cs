@@ -1,3 +1,4 @@
+using LoadWatch.Capacity;
 using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.Loads;
@@ -14,6 +15,9 @@ namespace LoadWatch.Replays;
 /// <param name="Tests">By date.</param>
 public sealed record ReplayedPerson(Person Person, Group Group, IReadOnlyList<Day> Days, PersonPlan Plan, IReadOnlyList<DatedTest> Tests)
 {
+    /// <summary>As <see cref="RuleSubject.BestMeans"/>, of all sessions.</summary>
+    public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> BestMeans { get; init; } = new Dictionary<string, IReadOnlyDictionary<Channel, BestMeans>>();
+
     /// <summary>
     /// The findings of every day by some limits. Days are taken as they are stored: a changed reference value is not looked across, and a quantity that today's
     /// limits do not name was not kept, so that it is unknown.
@@ -27,6 +31,7 @@ public sealed record ReplayedPerson(Person Person, Group Group, IReadOnlyList<Da
         Activities = [.. Days.SelectMany(day => day.Sessions.Select(session => session.On(day.Date)))],
         Plan = Plan,
         Tests = Tests,
+        BestMeans = BestMeans,
         Series = limits.Quantities.ToDictionary(name => name, name => new QuantitySeries(name, LoadUnits.Of(name), By(name)), StringComparer.Ordinal),
     });
 

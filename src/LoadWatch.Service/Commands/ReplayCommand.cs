@@ -78,7 +78,10 @@ public static class ReplayCommand
             configuration.GroupOf(person),
             session.Days.Before(person.Id, through, LocalDate.MinIsoValue),
             new PersonPlans(configuration).Of(session, person, LocalDate.MinIsoValue, through),
-            [.. tests.OrderBy(test => test.Date)]);
+            [.. tests.OrderBy(test => test.Date)])
+        {
+            BestMeans = session.Activities.BestMeans(person.Id, LocalDate.MinIsoValue, through),
+        };
     }
 
     private static bool TryRead(string[] words, WorkingConfiguration configuration, out IReadOnlyList<Mark> marks)

@@ -40,6 +40,11 @@ public static class FindingExplanation
             text.AppendLine(CultureInfo.InvariantCulture, $"    {WhyNone(configuration, session, known, rule, on)}");
         }
 
+        if (rule == FallingCapacityRule.Word)
+        {
+            CriticalText.Append(text, configuration, session, known, on);
+        }
+
         text.AppendLine(CultureInfo.InvariantCulture, $"    limits and basis: loadwatch rules {known.Id}");
         return text.ToString();
     }

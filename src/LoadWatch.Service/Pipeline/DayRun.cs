@@ -1,11 +1,13 @@
 using LoadWatch.Activities;
 using LoadWatch.Anchors;
+using LoadWatch.Capacity;
 using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.Limits;
 using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Plans;
+using LoadWatch.Recordings;
 using LoadWatch.Rows;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
@@ -81,7 +83,14 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
         var since = before!.Count == 0 ? LocalDate.MinIsoValue : first;
         var tests = session.TableRows.OfPerson(person.Id, RowKind.Tests, since, to).Select(row => new DatedTest(row.Date, (TestRow)row.Content)).ToList();
         var counted = training.Activities.Where(activity => activity.Date <= through);
-        return PersonSeries.Continue(person, configuration.GroupOf(person), before, [.. counted], tests, plans.Of(session, person, since, to), to, changes);
+        return PersonSeries.Continue(person, configuration.GroupOf(person), before, [.. counted], tests, plans.Of(session, person, since, to), to, changes, BestMeans(session, training, first, to));
+    }
+
+    /// <summary>Of the stretches that the rule of falling capacity compares; nothing where it reads no date.</summary>
+    private IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>>? BestMeans(StoreSession session, JoinResult training, LocalDate first, LocalDate to)
+    {
+        var limits = configuration.GroupOf(person).Limits.FallingCapacity;
+        return limits.Enabled && training.Activities.Count > 0 ? session.Activities.BestMeans(person.Id, first.PlusDays(-2 * limits.Days), to) : null;
     }
 
     private ReferenceChanges Changes(StoreSession session, LocalDate since, LocalDate to) => new(periods.Value, () => new RestatedSessions(

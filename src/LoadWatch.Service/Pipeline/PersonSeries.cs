@@ -1,8 +1,10 @@
 using LoadWatch.Activities;
+using LoadWatch.Capacity;
 using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.People;
 using LoadWatch.Plans;
+using LoadWatch.Recordings;
 using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
@@ -15,6 +17,7 @@ public sealed record PersonSeries(IReadOnlyList<Day> Days, IReadOnlyList<Finding
     /// <param name="tests">The same of function tests.</param>
     /// <param name="through">Last date.</param>
     /// <param name="changes">Null: no reference value ever changes.</param>
+    /// <param name="bestMeans">As <see cref="RuleSubject.BestMeans"/>; null: of no session.</param>
     public static PersonSeries Of(
         Person person,
         Group group,
@@ -22,8 +25,9 @@ public sealed record PersonSeries(IReadOnlyList<Day> Days, IReadOnlyList<Finding
         IReadOnlyList<DatedTest> tests,
         PersonPlan plan,
         LocalDate through,
-        ReferenceChanges? changes = null) =>
-        Continue(person, group, [], [.. training.Where(activity => activity.Date <= through)], tests, plan, through, changes);
+        ReferenceChanges? changes = null,
+        IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>>? bestMeans = null) =>
+        Continue(person, group, [], [.. training.Where(activity => activity.Date <= through)], tests, plan, through, changes, bestMeans);
 
     /// <summary>The dates behind days that there are: the same as if all were computed at once.</summary>
     /// <param name="before">
@@ -35,6 +39,7 @@ public sealed record PersonSeries(IReadOnlyList<Day> Days, IReadOnlyList<Finding
     /// <param name="plan">What is said of the dates to compute, and of the month before them.</param>
     /// <param name="to">Last date.</param>
     /// <param name="changes">Null: no reference value ever changes.</param>
+    /// <param name="bestMeans">As <see cref="RuleSubject.BestMeans"/>; null: of no session.</param>
     public static PersonSeries Continue(
         Person person,
         Group group,
@@ -43,7 +48,8 @@ public sealed record PersonSeries(IReadOnlyList<Day> Days, IReadOnlyList<Finding
         IReadOnlyList<DatedTest> tests,
         PersonPlan plan,
         LocalDate to,
-        ReferenceChanges? changes = null)
+        ReferenceChanges? changes = null,
+        IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>>? bestMeans = null)
     {
         var first = before.Count > 0 ? before[^1].Date.PlusDays(1) : training.Min(activity => (LocalDate?)activity.Date);
         if (first is not { } from || from > to)
@@ -51,7 +57,7 @@ public sealed record PersonSeries(IReadOnlyList<Day> Days, IReadOnlyList<Finding
             return new PersonSeries([], []);
         }
 
-        var stretch = new SeriesStretch(person, group, plan, changes);
+        var stretch = new SeriesStretch(person, group, plan, changes) { BestMeans = bestMeans ?? SeriesStretch.NoBestMeans };
         var (all, findings) = (before.ToList(), new List<Finding>());
         foreach (var next in (changes?.Periods.Cuts(from, to) ?? []).Append(to.PlusDays(1)))
         {

@@ -1,9 +1,11 @@
 using LoadWatch.Activities;
+using LoadWatch.Capacity;
 using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Plans;
+using LoadWatch.Recordings;
 using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
@@ -14,6 +16,11 @@ internal sealed class SeriesStretch(Person person, Group group, PersonPlan plan,
 {
     private readonly HashSet<string> names =
         group.Limits.Quantities.Concat(group.LoadFallbacks).Append(group.LoadQuantity).Append(QuantityNames.FosterLoad).ToHashSet(StringComparer.Ordinal);
+
+    public static IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> NoBestMeans { get; } = new Dictionary<string, IReadOnlyDictionary<Channel, BestMeans>>();
+
+    /// <summary>As <see cref="RuleSubject.BestMeans"/>.</summary>
+    public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> BestMeans { get; init; } = NoBestMeans;
 
     /// <param name="stored">Days before, each by the values of its own date.</param>
     /// <param name="training">From the first date on.</param>
@@ -50,6 +57,7 @@ internal sealed class SeriesStretch(Person person, Group group, PersonPlan plan,
             Plan = plan,
             Tests = [.. tests.Where(test => test.Date <= to)],
             Series = series,
+            BestMeans = BestMeans,
         };
         var findings = RuleBook.Evaluate(subject);
         RuleMemory? formerMemory = null;

@@ -160,15 +160,23 @@ public sealed class ActivityTable
     /// <summary>What a person's activities of the dates, both ends included, showed at best, sorted by date, start and key.</summary>
     public IReadOnlyList<SessionBests> Bests(string person, LocalDate from, LocalDate to)
     {
-        var means = session.Rows<ChannelRow>(SelectBestMeansOfPerson, new { person, from, to }).ToLookup(row => row.Activity, StringComparer.Ordinal);
+        var means = BestMeans(person, from, to);
         return
         [
             .. session.Rows<ActivityRow>(SelectMergesInDates, new { person, from, to })
-                .Where(row => means.Contains(row.Key))
-                .Select(row => new SessionBests(
-                    row.Key, row.Date, row.ToMerge().Session.Sport, means[row.Key].ToDictionary(one => Words<Channel>.Parse(one.Channel), one => BestMeansCodec.Read(one.Bytes)))),
+                .Where(row => means.ContainsKey(row.Key))
+                .Select(row => new SessionBests(row.Key, row.Date, row.ToMerge().Session.Sport, means[row.Key])),
         ];
     }
+
+    /// <summary>Best means of a person's activities of the dates, both ends included, by key of the activity.</summary>
+    public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> BestMeans(string person, LocalDate from, LocalDate to) =>
+        session.Rows<ChannelRow>(SelectBestMeansOfPerson, new { person, from, to })
+            .GroupBy(row => row.Activity, StringComparer.Ordinal)
+            .ToDictionary(
+                rows => rows.Key,
+                IReadOnlyDictionary<Channel, BestMeans> (rows) => rows.ToDictionary(row => Words<Channel>.Parse(row.Channel), row => BestMeansCodec.Read(row.Bytes)),
+                StringComparer.Ordinal);
 
     /// <summary>The quantities of a person's activities of the dates, both ends included, where one's name begins with a prefix; sorted by date.</summary>
     public IReadOnlyList<(LocalDate Date, IReadOnlyList<Quantity> Quantities)> QuantitiesLike(string person, LocalDate from, LocalDate to, string prefix) =>

@@ -30,7 +30,7 @@ public sealed class DaysFromAnyDateTests
     {
         var history = new RandomHistory(number);
         var last = RandomHistory.First.PlusDays(RandomHistory.Days - 1);
-        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes());
+        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes(), history.BestMeans(RandomHistory.First, last));
         foreach (var cut in Enumerable.Range(0, 6).Select(_ => history.Below(whole.Days.Count - 1)))
         {
             var stored = whole.Days.Take(cut + 1).Select(Stored).ToList();
@@ -46,7 +46,7 @@ public sealed class DaysFromAnyDateTests
     {
         var history = new RandomHistory(number);
         var last = RandomHistory.First.PlusDays(RandomHistory.Days - 1);
-        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes());
+        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes(), history.BestMeans(RandomHistory.First, last));
         foreach (var cut in Enumerable.Range(0, 6).Select(_ => history.Below(whole.Days.Count)))
         {
             var next = whole.Days[cut].Date.PlusDays(1);
@@ -64,11 +64,11 @@ public sealed class DaysFromAnyDateTests
     {
         var history = new RandomHistory(number);
         var last = RandomHistory.First.PlusDays(RandomHistory.Days - 1);
-        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes());
+        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes(), history.BestMeans(RandomHistory.First, last));
         foreach (var night in Enumerable.Range(0, 4).Select(_ => RandomHistory.First.PlusDays(30 + history.Below(RandomHistory.Days - 30))))
         {
             var known = PersonSeries.Of(
-                history.Person, history.Group, [.. history.Sessions.Where(session => session.Date <= night)], [.. history.Tests.Where(test => test.Date <= night)], history.Plan, night, history.Changes(night));
+                history.Person, history.Group, [.. history.Sessions.Where(session => session.Date <= night)], [.. history.Tests.Where(test => test.Date <= night)], history.Plan, night, history.Changes(night), history.BestMeans(RandomHistory.First, night));
             var settled = night.PlusDays(-LoadCalendar.SettledDaysBack);
             Same(whole.Days.Where(day => day.Date <= settled), known.Days.Where(day => day.Date <= settled));
             Same(whole.Findings.Where(finding => finding.Date <= settled), known.Findings.Where(finding => finding.Date <= settled));
@@ -82,11 +82,12 @@ public sealed class DaysFromAnyDateTests
         var last = RandomHistory.First.PlusDays(RandomHistory.Days - 1);
         var found = Enumerable.Range(0, 20)
             .Select(number => new RandomHistory((uint)number))
-            .SelectMany(history => PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes()).Findings)
+            .SelectMany(history => PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes(), history.BestMeans(RandomHistory.First, last)).Findings)
             .ToList();
 
         Assert.Equal(RuleBook.All.Select(rule => rule.Name).Order(StringComparer.Ordinal), found.Select(finding => finding.Rule).Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal));
         Assert.Contains(found, finding => finding is { Rule: "load_ratio", Quantity: "distance" });
+        Assert.Contains(found, finding => finding is { Rule: "falling_capacity", Quantity: "critical_power", Severity: Severity.Notice });
         Assert.Contains(found, finding => Period.DaysBetween(finding.Since, finding.Date) > LoadCalendar.LookBackDays);
         Assert.Contains(found, finding => finding.Severity == Severity.Note);
         Assert.Contains(found, finding => finding.Severity > Severity.Note && finding.Evidence.Inputs.Any(item => item.Name == "heart_rate_max_before"));
@@ -98,7 +99,7 @@ public sealed class DaysFromAnyDateTests
     {
         var history = new RandomHistory(number);
         var last = RandomHistory.First.PlusDays(RandomHistory.Days - 1);
-        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes());
+        var whole = PersonSeries.Of(history.Person, history.Group, history.Sessions, history.Tests, history.Plan, last, history.Changes(), history.BestMeans(RandomHistory.First, last));
         var (days, findings) = (new List<Day>(), new List<Finding>());
         for (var to = whole.Days[0].Date.PlusDays(history.Below(40)); days.Count < whole.Days.Count; to = LocalDate.Min(last, to.PlusDays(1 + history.Below(300))))
         {
@@ -142,7 +143,7 @@ public sealed class DaysFromAnyDateTests
             findings.AddRange(part.Findings);
             if (history.Below(5) == 0 || through == RandomHistory.First.PlusDays(RandomHistory.Days - 1))
             {
-                var whole = PersonSeries.Of(history.Person, history.Group, sessions, history.Tests, history.Plan, through, history.Changes());
+                var whole = PersonSeries.Of(history.Person, history.Group, sessions, history.Tests, history.Plan, through, history.Changes(), history.BestMeans(RandomHistory.First, through));
                 Same(whole.Days, days);
                 Same(whole.Findings, findings);
             }
@@ -176,7 +177,8 @@ public sealed class DaysFromAnyDateTests
             [.. history.Tests.Where(test => test.Date >= from && test.Date <= to)],
             before.Count == 0 ? history.Plan : From(history.Plan, from),
             to,
-            changes);
+            changes,
+            history.BestMeans(before.Count == 0 ? RandomHistory.First : from.PlusDays(-2 * history.Group.Limits.FallingCapacity.Days), to));
     }
 
     private static PersonPlan From(PersonPlan plan, LocalDate from) => new()

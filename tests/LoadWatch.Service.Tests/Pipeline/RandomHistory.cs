@@ -1,4 +1,5 @@
 using LoadWatch.Activities;
+using LoadWatch.Capacity;
 using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.Loads;
@@ -23,6 +24,7 @@ internal sealed class RandomHistory
     public static readonly LocalDate First = new(2023, 3, 6);
 
     private readonly IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, Histogram>> histograms;
+    private readonly Dictionary<string, IReadOnlyDictionary<Channel, BestMeans>> bestMeans;
     private ulong state;
 
     public RandomHistory(uint number)
@@ -38,6 +40,7 @@ internal sealed class RandomHistory
         Tests = [.. Enumerable.Range(0, Below(30)).Select(_ => Test(First.PlusDays(Below(Days) - 20)))];
         Anchors = RandomReferences.Anchors(Below, First, Days);
         (Sessions, histograms) = RandomReferences.Computed(Sessions, Person, Anchors, Below);
+        bestMeans = Sessions.Where(session => session.Sport.Name == "cycling").ToDictionary(session => session.Key, Bests, StringComparer.Ordinal);
     }
 
     public Person Person { get; }
@@ -60,6 +63,11 @@ internal sealed class RandomHistory
         return new ReferenceChanges(periods, () => new RestatedSessions(Person, known, new ComputationSettings(), periods.Quantities, histograms));
     }
 
+    /// <summary>Of the sessions of some dates, both ends included.</summary>
+    public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> BestMeans(LocalDate from, LocalDate to) => Sessions
+        .Where(session => session.Date >= from && session.Date <= to && bestMeans.ContainsKey(session.Key))
+        .ToDictionary(session => session.Key, session => bestMeans[session.Key], StringComparer.Ordinal);
+
     /// <summary>A whole number from 0 on, below a limit.</summary>
     public int Below(int limit)
     {
@@ -74,6 +82,17 @@ internal sealed class RandomHistory
     {
         Quantities = [.. session.Quantities.Select(quantity => quantity with { Value = Significant.Round(quantity.Value * (0.5 + (Below(150) / 100.0))) })],
     };
+
+    /// <summary>An effort of a ride, mostly as hard as can be by a critical power that changes from season to season, amid 100 W; often with heart rate.</summary>
+    private IReadOnlyDictionary<Channel, BestMeans> Bests(JoinedActivity session)
+    {
+        int[] efforts = [120, 180, 300, 720, 1200];
+        var (seconds, critical) = (efforts[Below(efforts.Length)], Period.DaysBetween(First, session.Date) / 90 % 2 == 0 ? 260 : 215);
+        var watts = (critical + (18_000.0 / seconds)) * (Below(4) == 0 ? 0.8 : 1);
+        var power = new BestMeans(Capacity.BestMeans.Durations.Select(duration => Significant.Round(duration <= seconds ? watts : 100 + ((watts - 100) * seconds / duration))));
+        var heartRate = new BestMeans(Capacity.BestMeans.Durations.Select(_ => 170.0 + Below(4)));
+        return Below(3) == 0 ? new Dictionary<Channel, BestMeans> { [Channel.Power] = power } : new Dictionary<Channel, BestMeans> { [Channel.Power] = power, [Channel.HeartRate] = heartRate };
+    }
 
     private DatePeriod Invalid()
     {
