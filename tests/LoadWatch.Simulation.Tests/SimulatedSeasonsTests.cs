@@ -13,6 +13,8 @@ public class SimulatedSeasonsTests
 {
     private const int Seed = 1;
 
+    private static readonly Habits[] All = [Habits.Squad, Habits.Runners, Habits.Clinic];
+
     private static readonly World Squad = Maker(Habits.Squad).Healthy(30, 56);
 
     private static readonly Lazy<SeasonResult> Usual = new(() => Season.Of(Squad, Habits.Squad.Sport));
@@ -25,13 +27,21 @@ public class SimulatedSeasonsTests
         Assert.Equal(0, Score.Chatter(Usual.Value));
     }
 
-    [Fact]
-    public void AHealthyClinicIsLeftInPeace()
+    /// <summary>
+    /// Over several seeds, since a few dozen people of one may be lucky. Runners have no plan, so nothing tells their rest from a session that left no recording: over
+    /// ten seeds of 40 they are at the bound (tests/README.md), and small groups scatter about it.
+    /// </summary>
+    [Theory]
+    [InlineData("squad", 1)]
+    [InlineData("clinic", 1)]
+    [InlineData("runners", 1.25)]
+    public void TheHealthyAreLeftInPeace(string group, double bound)
     {
-        var season = Season.Of(Maker(Habits.Clinic).Healthy(30, 56), Habits.Clinic.Sport);
+        var habits = Of(group);
+        var seasons = Enumerable.Range(2, 5).Select(seed => Season.Of(Maker(habits, seed).Healthy(16, 56), habits.Sport)).ToList();
 
-        Assert.InRange(Score.FalsePerPersonAnd100Days(season), 0, 1);
-        Assert.Equal(0, Score.Chatter(season));
+        Assert.InRange(seasons.Average(Score.FalsePerPersonAnd100Days), 0, bound);
+        Assert.All(seasons, season => Assert.Equal(0, Score.Chatter(season)));
     }
 
     [Fact]
@@ -88,5 +98,7 @@ public class SimulatedSeasonsTests
         Assert.True(Chatter(Limits.WithoutDeadband(Limits.BuiltIn(Habits.Squad))) > Chatter(Limits.BuiltIn(Habits.Squad)));
     }
 
-    private static WorldMaker Maker(Habits habits) => new(Seed, habits, new Noise(), Limits.BuiltIn(habits));
+    private static Habits Of(string group) => All.Single(habits => habits.Name == group);
+
+    private static WorldMaker Maker(Habits habits, int seed = Seed) => new(seed, habits, new Noise(), Limits.BuiltIn(habits));
 }

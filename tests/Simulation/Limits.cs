@@ -15,10 +15,11 @@ public static class Limits
         var limits = new RuleLimits();
         return OfClinicBefore(habits, limits with
         {
-            LoadRatio = limits.LoadRatio with { Raise = 1.8, Return = 1.6, OnDays = 1 },
-            WeeklyJump = limits.WeeklyJump with { Raise = 0.4, Return = 0.25, UsualFactor = 1.2 },
+            LoadRatio = limits.LoadRatio with { Raise = 1.8, Return = 1.6, UsualFactor = 1, OnDays = 1 },
+            WeeklyJump = limits.WeeklyJump with { Raise = 0.4, Return = 0.25, UsualFactor = 1.2, UnplannedFactor = 1.2, OnDays = 2, OffDays = 1 },
             SessionSpike = limits.SessionSpike with { LoadNotice = 0.4, RunNotice = 0.1, RunWarning = 0.3, SessionsWanted = 8 },
-            FallingLoad = limits.FallingLoad with { Notice = 0.6, OnDays = 1 },
+            FallingLoad = limits.FallingLoad with { Notice = 0.6, Days = 14, OnDays = 1 },
+            StimulusGap = limits.StimulusGap with { NoticeDays = 10 },
             StimulusLow = limits.StimulusLow with { UsualShare = 0.5, OlderFloorDays = 3 },
             Silence = limits.Silence with { PlannedMissed = 2, ExtraDays = 2 },
             NotUsable = limits.NotUsable with { Sessions = 2 },

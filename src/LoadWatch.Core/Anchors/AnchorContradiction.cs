@@ -60,9 +60,9 @@ public sealed record AnchorContradiction(ObservedAnchor Observed, Anchor Measure
                 { Exercise: { } exercise, Machine: { } machine } => $" of {exercise.Replace('_', ' ')} on {machine.Replace('_', ' ')}",
                 _ => "",
             };
-            var measured = Measured.Date is { } date ? FormattableString.Invariant($"measured on {date:yyyy-MM-dd}") : "measured";
+            var measured = Measured.Date is { } date ? FormattableString.Invariant($"measured on {date:d MMMM uuuu}") : "measured";
             return FormattableString.Invariant(
-                $"{ReferenceWords.Of(Observed.Kind)}{of}: {Measured.Value:0.##} {unit} {measured}, own sessions up to {Observed.ShownOn:yyyy-MM-dd} show {Told(Observed.Value)} {unit} (within {Told(Observed.Error)} {unit}): the measured one is used; measure again?");
+                $"{ReferenceWords.Of(Observed.Kind)}{of}: {Measured.Value:0.##} {unit} {measured}, own sessions up to {Observed.ShownOn:d MMMM uuuu} show {Told(Observed.Value)} {unit} (within {Told(Observed.Error)} {unit}): the measured one is used; measure again?");
         }
     }
 

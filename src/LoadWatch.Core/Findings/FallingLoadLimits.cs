@@ -1,5 +1,4 @@
 using System.ComponentModel.DataAnnotations;
-using System.Text.Json.Serialization;
 
 namespace LoadWatch.Findings;
 
@@ -24,10 +23,16 @@ public sealed record FallingLoadLimits : IDelayedLimits
     [Range(0.1, 1.0)]
     public double Return { get; init; } = 0.7;
 
-    /// <summary>Days with known load wanted among the 14. Days.</summary>
-    [Range(10, 14)]
-    [JsonPropertyName("covered_of_14")]
-    public int CoveredOf14 { get; init; } = 10;
+    /// <summary>Length of the stretch whose mean week is compared. Fitted by simulation. Days.</summary>
+    [Range(14, 42)]
+    public int Days { get; init; } = 21;
+
+    /// <summary>Share of its days with known load that is wanted. A choice. 0 to 1.</summary>
+    [Range(0.5, 1.0)]
+    public double CoveredShare { get; init; } = 0.7;
+
+    /// <summary>The same in whole days.</summary>
+    internal int KnownWanted => (int)Math.Ceiling(Significant.Round(CoveredShare * Days));
 
     /// <summary>Weeks before those days that make the usual. Weeks.</summary>
     [Range(4, 12)]

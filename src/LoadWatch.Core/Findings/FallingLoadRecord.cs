@@ -13,9 +13,9 @@ internal sealed class FallingLoadRecord : RuleRecord
 
     public override string Decides => KeyWords.CoachAndPerson;
 
-    public override string Ends => "The mean week of the last 14 days is back at its return value, on readable dates.";
+    public override string Ends => "The mean week of the last 21 days, or as many as the limits say, is back at its return value, on readable dates.";
 
-    public override string DataNeeded => "Known load on 10 of the 14 days, and 6 ordinary weeks among the 8 before.";
+    public override string DataNeeded => "Known load on seven of ten of those days, and 6 ordinary weeks among the 8 before.";
 
     public override string Basis =>
         "Spiering, Mujika, Sharp and Foulis 2021, J Strength Cond Res 35:1449-1458, for about a third; the other limits are a choice, the notice and its delay fitted by simulation.";

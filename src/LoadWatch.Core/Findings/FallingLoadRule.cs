@@ -1,5 +1,4 @@
-// Mean week of the last 14 days against the median of the 8 weeks before: ratio = (7 x sum of 14 days / known days) / median week, the same as the 14-day sum
-// against twice the median week.
+// Mean week of the last 21 days against the median of the 8 weeks before: ratio = (7 x sum of 21 days / known days) / median week.
 // Endurance was kept for up to 15 weeks when volume was cut by 33 to 66 % and intensity kept: Spiering, Mujika, Sharp and Foulis 2021, J Strength Cond Res
 // 35:1449-1458. Below 34 % lies outside of what was shown; the return value is a choice; 55 % and the delay were fitted by simulation
 // (tests/README.md).
@@ -12,13 +11,11 @@ using NodaTime;
 namespace LoadWatch.Findings;
 
 /// <summary>
-/// The usual load is fading. The 14 days are the last ones that plan and answers do not set aside, within 28 days; a date of unknown load, too few known days
+/// The usual load is fading. The days are the last ones that plan and answers do not set aside, within twice as many; a date of unknown load, too few known days
 /// or too few ordinary weeks before them leave it as it was (I-6). Off in light weeks, the off-season, absences and after the return.
 /// </summary>
 public sealed class FallingLoadRule : IRule
 {
-    private const int WindowDays = 14;
-    private const int WindowWithin = 28;
     private const int KnownOf7 = 5;
 
     public string Name => "falling_load";
@@ -54,8 +51,8 @@ public sealed class FallingLoadRule : IRule
 
     private static Fall? Read(IReadOnlyList<Day> days, int index, FallingLoadLimits limits)
     {
-        var (loads, oldest) = LastDays(days, index);
-        var week = LoadWindow.Of(CollectionsMarshal.AsSpan(loads), 0, WindowDays).MeanWeek(limits.CoveredOf14);
+        var (loads, oldest) = LastDays(days, index, limits.Days);
+        var week = LoadWindow.Of(CollectionsMarshal.AsSpan(loads), 0, limits.Days).MeanWeek(limits.KnownWanted);
         if (days[index].Load is null || week is null)
         {
             return null;
@@ -67,10 +64,10 @@ public sealed class FallingLoadRule : IRule
     }
 
     /// <summary>Loads of the last days that are not set aside, newest first, and the index of the oldest.</summary>
-    private static (List<double?> Loads, int Oldest) LastDays(IReadOnlyList<Day> days, int index)
+    private static (List<double?> Loads, int Oldest) LastDays(IReadOnlyList<Day> days, int index, int wanted)
     {
-        var (loads, oldest) = (new List<double?>(WindowDays), index);
-        for (var at = index; at >= 0 && at > index - WindowWithin && loads.Count < WindowDays; at--)
+        var (loads, oldest) = (new List<double?>(wanted), index);
+        for (var at = index; at >= 0 && at > index - (2 * wanted) && loads.Count < wanted; at--)
         {
             if (!days[at].Plan.IsSetAside())
             {
@@ -105,7 +102,7 @@ public sealed class FallingLoadRule : IRule
 
     private static string Sentence(WatchedSeries series, LocalDate date, LocalDate since, Fall read, double limit, FallingLoadLimits limits)
     {
-        var what = $"{series.Heading} of the last 14 days {Wording.Is(read.Date, date)} {Wording.Percent(read.Ratio, limit)} of the usual "
+        var what = $"{series.Heading} of the last {limits.Days} days {Wording.Is(read.Date, date)} {Wording.Percent(read.Ratio, limit)} of the usual "
             + $"({Wording.Number(read.Week)} a week against {Wording.Number(read.Usual)} {series.Unit})";
         var against = read.Ratio < limit
             ? $", under the limit of {Wording.Percent(limit)}; low since {Wording.Date(since, date)}"
@@ -114,12 +111,12 @@ public sealed class FallingLoadRule : IRule
     }
 
     private static Evidence Basis(Fall read, FallingLoadLimits limits, string unit) => new(
-        "ratio = mean week of the last 14 days that are not set aside, scaled to their known days / median of the ordinary weeks before them",
+        "ratio = mean week of the last days that are not set aside, scaled to their known days / median of the ordinary weeks before them",
         "Spiering, Mujika, Sharp and Foulis 2021, J Strength Cond Res 35:1449-1458 for about a third; the other limits: a choice",
         [
             new("ratio", read.Ratio, "ratio", $"on {Wording.IsoDate(read.Date)}"),
-            new("week", read.Week, unit, "mean week of the 14 days"),
-            new("known_of_14", read.Known, "days"),
+            new("week", read.Week, unit, "mean week of those days"),
+            new("known", read.Known, "days"),
             new("usual", read.Usual, unit, "median of the ordinary weeks before"),
             new("ordinary_weeks", read.Weeks, "count"),
             new("notice", limits.Notice, "ratio"),
@@ -127,7 +124,8 @@ public sealed class FallingLoadRule : IRule
             new("return", limits.Return, "ratio"),
             new("on_days", limits.OnDays, "days"),
             new("off_days", limits.OffDays, "days"),
-            new("covered_of_14_wanted", limits.CoveredOf14, "days"),
+            new("days", limits.Days, "days"),
+            new("covered_share_wanted", limits.CoveredShare, "share"),
             new("weeks", limits.Weeks, "count"),
             new("weeks_wanted", limits.WeeksWanted, "count"),
         ]);

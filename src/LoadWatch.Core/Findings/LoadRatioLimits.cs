@@ -38,6 +38,10 @@ public sealed record LoadRatioLimits : IDelayedLimits
     [Range(0.0, 1.0)]
     public double ChronicShareOfMedian { get; init; } = 0.4;
 
+    /// <summary>Raised only when the last 7 days exceed this multiple of the usual week too, where one is known: three light weeks are no usual to compare with. Fitted by simulation. Dimensionless.</summary>
+    [Range(1.0, 5.0)]
+    public double UsualFactor { get; init; } = 1.5;
+
     /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. Fitted by simulation. Days.</summary>
     [Range(1, 14)]
     public int OnDays { get; init; } = 2;

@@ -56,7 +56,8 @@ public sealed class LoadRatioRule : IRule
     private static bool Raises(Day day, LoadRatioLimits limits) =>
         day.RatioUncoupled >= limits.Raise
         && day.DaysSinceFirstCovered >= limits.HistoryDays
-        && day.Chronic > Significant.Round(limits.ChronicShareOfMedian * day.ChronicMedian);
+        && day.Chronic > Significant.Round(limits.ChronicShareOfMedian * day.ChronicMedian)
+        && !(day.Acute <= Significant.Round(limits.UsualFactor * day.UsualWeek));
 
     private Finding Find(WatchedSeries series, LocalDate date, LocalDate since, Ratio read, LoadRatioLimits limits) => new(
         series.Person.Id,

@@ -13,14 +13,21 @@ internal sealed class PlannedSessions(SilenceLimits limits, MissedSessions? befo
     /// <summary>Of more than these only the number is kept: a season without any recording is told by its first ones.</summary>
     private const int Told = 20;
 
+    /// <summary>A plan that told fewer of the recent sessions than this says little of when the next is to come: then the person's own rhythm does. A choice. Share.</summary>
+    private const double ToldShare = 0.7;
+
     private readonly List<LocalDate> expected = [];
+    private readonly List<(LocalDate Date, bool Told)> recorded = [];
     private readonly List<LocalDate> first = [.. before?.First ?? []];
     private readonly List<LocalDate> pending = [.. before?.Pending ?? []];
     private int missed = before?.Count ?? 0;
     private LocalDate today;
 
-    /// <summary>Whether the plan has told often enough when recordings are to come; a plan that begins does not hide a silence that stands.</summary>
-    public bool IsWatched => expected.Count(date => date.PlusDays(limits.PlannedWaitDays) <= today) >= limits.PlannedMissed;
+    /// <summary>
+    /// Whether the plan has told often enough when recordings are to come, and told most of those that came; a plan that begins does not hide a silence that stands.
+    /// </summary>
+    public bool IsWatched => expected.Count(date => date.PlusDays(limits.PlannedWaitDays) <= today) >= limits.PlannedMissed
+        && recorded.Count(session => session.Told) >= Significant.Round(ToldShare * recorded.Count);
 
     /// <summary>How many are without a recording, those left out that may still come in.</summary>
     public int Missed => missed;
@@ -39,6 +46,12 @@ internal sealed class PlannedSessions(SilenceLimits limits, MissedSessions? befo
         if (day.Plan.Expected > 0)
         {
             expected.Add(day.Date);
+        }
+
+        if (day.State == DayState.Recorded)
+        {
+            recorded.RemoveAll(session => Period.DaysBetween(session.Date, today) > WatchedDays);
+            recorded.Add((day.Date, day.Plan.Expected > 0));
         }
     }
 

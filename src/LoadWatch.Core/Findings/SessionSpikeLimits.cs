@@ -30,7 +30,7 @@ public sealed record SessionSpikeLimits : IRuleLimits
 
     /// <summary>Sessions with known load wanted in the days before. Fitted by simulation. Count.</summary>
     [Range(3, 120)]
-    public int SessionsWanted { get; init; } = 5;
+    public int SessionsWanted { get; init; } = 4;
 
     /// <summary>The days before. Days.</summary>
     [Range(14, 90)]

@@ -3,7 +3,7 @@ using LoadWatch.Stimulus;
 
 namespace LoadWatch.Findings;
 
-/// <summary>Limits of the rule <c>stimulus_gap</c>: too long without heavy or fast work of a body region. All a choice.</summary>
+/// <summary>Limits of the rule <c>stimulus_gap</c>: too long without heavy or fast work of a body region. All a choice; the days to a notice are fitted by simulation.</summary>
 public sealed record StimulusGapLimits : IRuleLimits
 {
     private static readonly IReadOnlyList<BodyRegion> LegsOnly = [BodyRegion.Legs];
@@ -16,7 +16,7 @@ public sealed record StimulusGapLimits : IRuleLimits
 
     /// <summary>Days without heavy or fast work that raise a notice. Days.</summary>
     [Range(2, 120)]
-    public int NoticeDays { get; init; } = 10;
+    public int NoticeDays { get; init; } = 12;
 
     /// <summary>Under <see cref="OlderFrom"/>: days that raise a warning. Days.</summary>
     [Range(2, 180)]

@@ -18,7 +18,7 @@ internal sealed class StimulusGapRecord : RuleRecord
     public override string DataNeeded => "The region seen by sets, power or speed on most days of the gap.";
 
     public override string Basis =>
-        "Every number is a choice; what counts as heavy or fast rests on the size principle (recruitment thresholds, DEVELOPERS.md).";
+        "Every number is a choice, the days to a notice fitted by simulation; what counts as heavy or fast rests on the size principle (recruitment thresholds, DEVELOPERS.md).";
 
     public override int Rank => 2;
 

@@ -3,7 +3,7 @@ using System.Text.Json.Serialization;
 
 namespace LoadWatch.Findings;
 
-/// <summary>Limits of the rule <c>weekly_jump</c>: this week far above the last ordinary one. All a choice; the first three numbers are fitted by simulation.</summary>
+/// <summary>Limits of the rule <c>weekly_jump</c>: this week far above the last ordinary one. All a choice; the first four numbers and the delays are fitted by simulation.</summary>
 public sealed record WeeklyJumpLimits : IDelayedLimits
 {
     /// <summary>Whether the rule is watched at all.</summary>
@@ -14,15 +14,19 @@ public sealed record WeeklyJumpLimits : IDelayedLimits
 
     /// <summary>Raised when the last 7 days lie this fraction or more above the last ordinary week. Fraction, 0.3 is 30 % more.</summary>
     [Range(0.05, 5.0)]
-    public double Raise { get; init; } = 0.3;
+    public double Raise { get; init; } = 0.2;
 
     /// <summary>Returns below this fraction. Fraction.</summary>
     [Range(0.0, 5.0)]
-    public double Return { get; init; } = 0.15;
+    public double Return { get; init; } = 0.1;
 
     /// <summary>Raised only when the last 7 days exceed the median of the ordinary weeks before by this factor too. Dimensionless.</summary>
     [Range(1.0, 5.0)]
-    public double UsualFactor { get; init; } = 1.5;
+    public double UsualFactor { get; init; } = 1.45;
+
+    /// <summary>The same where no plan tells which sessions to expect: a session that left no recording cannot be told from rest there, and the weeks lie further apart. Dimensionless.</summary>
+    [Range(1.0, 5.0)]
+    public double UnplannedFactor { get; init; } = 1.6;
 
     /// <summary>Ordinary weeks of that median. Count.</summary>
     [Range(3, 12)]
@@ -37,13 +41,13 @@ public sealed record WeeklyJumpLimits : IDelayedLimits
     [JsonPropertyName("covered_of_7")]
     public int CoveredOf7 { get; init; } = 5;
 
-    /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. A choice. Days.</summary>
+    /// <summary>Dates in a row, of those that can be read, on which it must be so before it is raised. Fitted by simulation. Days.</summary>
     [Range(1, 14)]
-    public int OnDays { get; init; } = 2;
+    public int OnDays { get; init; } = 1;
 
-    /// <summary>Dates in a row, of those that can be read, on which it must be so no more before it is over. A choice. Days.</summary>
+    /// <summary>Dates in a row, of those that can be read, on which it must be so no more before it is over. Fitted by simulation. Days.</summary>
     [Range(1, 14)]
-    public int OffDays { get; init; } = 1;
+    public int OffDays { get; init; } = 3;
 
     /// <summary>As what it is raised. A choice.</summary>
     public RaisedAs Severity { get; init; } = RaisedAs.Notice;

@@ -18,7 +18,7 @@ internal sealed class WeeklyJumpRecord : RuleRecord
     public override string DataNeeded => "Known load on most days of this week and of the ordinary weeks before.";
 
     public override string Basis =>
-        "That weekly changes are kept small is advice of Soligard et al. 2016, Br J Sports Med 50:1030-1041 (from memory; the evidence is weak). Every number is a choice; raise, return and the factor of the usual were fitted by simulation.";
+        "That weekly changes are kept small is advice of Soligard et al. 2016, Br J Sports Med 50:1030-1041 (from memory; the evidence is weak). Every number is a choice; raise, return, the factors of the usual and the delays were fitted by simulation.";
 
     public override int Rank => 4;
 

@@ -1,7 +1,8 @@
 // Rolling week against the last ordinary week: change = (A - B) / B, and A against the median M of ordinary weeks.
-// A: load of the last 7 days, B: load of the newest week before them that is not skipped, M: median of the ordinary weeks (PastWeek).
+// A: load of the last 7 days, B: load of the newest week before them that is not skipped, M: median of the ordinary weeks (PastWeek), without a plan of those that are as
+// full (FullWeek). Each is the load as if every session were known (TrainingWeek).
 // That weekly changes are kept small is advice of Soligard et al. 2016, Br J Sports Med 50:1030-1041 (from memory; the evidence is weak). Every number is a choice;
-// raise, return and the factor of the usual were fitted by simulation (tests/README.md).
+// raise, return, the factors of the usual and the delays were fitted by simulation (tests/README.md).
 // Departure from the plain change of a week: a light week, the off-season, travel, an absence, a return and a week without any load are stepped over, so that
 // a usual week after one of them is no jump; a week of which too little is known is not.
 using LoadWatch.Days;
@@ -17,6 +18,12 @@ namespace LoadWatch.Findings;
 public sealed class WeeklyJumpRule : IRule
 {
     private const int WeekDays = 7;
+
+    /// <summary>A plan that has expected nothing in this week and the weeks before it tells of no missing session. Weeks.</summary>
+    private const int PlanWeeks = 4;
+
+    /// <summary>Fewest full weeks to compare with where there is no plan. A choice. Count.</summary>
+    private const int FullWeeksWanted = 4;
 
     public string Name => "weekly_jump";
 
@@ -51,15 +58,34 @@ public sealed class WeeklyJumpRule : IRule
 
     private static Jump? Read(IReadOnlyList<Day> days, int index, WeeklyJumpLimits limits)
     {
-        var acute = PastWeek.Before(days, index, 1, limits.CoveredOf7).Single().Load;
-        var weeks = PastWeek.Before(days, index - WeekDays, limits.LookBackWeeks, limits.CoveredOf7).ToList();
-        return days[index].Load is not null && WeekChange.Of(acute, weeks) is { } change && UsualWeek.Of(weeks, limits.Weeks, limits.Weeks) is { } usual
-            ? new Jump(days[index].Date, change.Acute, change.BeforeUpTo, change.Before, usual.Load, change.Fraction)
+        if (days[index].Load is null)
+        {
+            return null;
+        }
+
+        var week = TrainingWeek.Before(days, index, 1, limits.CoveredOf7).Single();
+        var before = TrainingWeek.Before(days, index - WeekDays, limits.LookBackWeeks, limits.CoveredOf7).ToList();
+        var weeks = before.ConvertAll(one => one.Past);
+        return WeekChange.Of(week.Load, weeks) is { } change && Usual(week, before, limits) is { } usual
+            ? new Jump(days[index].Date, change.Acute, change.BeforeUpTo, change.Before, usual.Load, change.Fraction, usual.Factor)
             : null;
     }
 
+    /// <summary>The usual week and the factor by which it must be exceeded; null where too few ordinary weeks are known.</summary>
+    private static (double Load, double Factor)? Usual(TrainingWeek week, List<TrainingWeek> before, WeeklyJumpLimits limits)
+    {
+        var all = UsualWeek.Of(before.Select(one => one.Past), limits.Weeks, limits.Weeks);
+        if (all is null || week.IsPlanned || before.Take(PlanWeeks).Any(one => one.IsPlanned))
+        {
+            return all is { } usual ? (usual.Load, limits.UsualFactor) : null;
+        }
+
+        var full = UsualWeek.Of(FullWeek.LikeOf(week, before, FullWeeksWanted), limits.Weeks, FullWeeksWanted);
+        return full is { } like ? (like.Load, limits.UnplannedFactor) : null;
+    }
+
     private static bool Raises(Jump jump, WeeklyJumpLimits limits) =>
-        jump.Change >= limits.Raise && jump.Acute > Significant.Round(limits.UsualFactor * jump.Usual);
+        jump.Change >= limits.Raise && jump.Acute > Significant.Round(jump.Factor * jump.Usual);
 
     private Finding Find(WatchedSeries series, LocalDate date, LocalDate since, Jump read, WeeklyJumpLimits limits) => new(
         series.Person.Id,
@@ -91,7 +117,7 @@ public sealed class WeeklyJumpRule : IRule
 
     private static Evidence Basis(Jump read, WeeklyJumpLimits limits, string unit) => new(
         "change = (load of the last 7 days - load of the last ordinary week) / the latter, and the last 7 days against the median of the ordinary weeks before; "
-            + "weeks scaled to their known days",
+            + "a week with sessions missing is scaled to its sessions; without a plan the usual is that of weeks with as many training days",
         "a choice",
         [
             new("change", read.Change, "fraction", $"on {Wording.IsoDate(read.Date)}"),
@@ -100,7 +126,7 @@ public sealed class WeeklyJumpRule : IRule
             new("usual", read.Usual, unit, "median of the ordinary weeks"),
             new("raise", limits.Raise, "fraction"),
             new("return", limits.Return, "fraction"),
-            new("usual_factor", limits.UsualFactor, "ratio"),
+            new("usual_factor", read.Factor, "ratio"),
             new("weeks", limits.Weeks, "count"),
             new("look_back", limits.LookBackWeeks, "weeks"),
             new("covered_of_7_wanted", limits.CoveredOf7, "days"),
@@ -109,5 +135,5 @@ public sealed class WeeklyJumpRule : IRule
         ]);
 
     /// <summary>What a date shows; loads in the series' unit.</summary>
-    private sealed record Jump(LocalDate Date, double Acute, LocalDate BeforeUpTo, double Before, double Usual, double Change);
+    private sealed record Jump(LocalDate Date, double Acute, LocalDate BeforeUpTo, double Before, double Usual, double Change, double Factor);
 }

@@ -3,7 +3,7 @@ using static NodaTime.IsoDayOfWeek;
 
 namespace LoadWatch.Service.Demo;
 
-/// <summary>What the staff planned: the squad's common rows, a day off, a regatta, the camp before the season; the clinic's classes.</summary>
+/// <summary>What the staff planned: the squad's common rows, a day off, one rower's days off around a long row, a regatta, the camp before the season; the clinic's classes.</summary>
 internal static class DemoPlanTable
 {
     public const string Path = "inbox/plan.csv";
@@ -18,6 +18,12 @@ internal static class DemoPlanTable
         var (camp, regatta) = (DemoCalendar.Camp(until), DemoCalendar.Regatta(until));
         yield return $"boat,,{DemoCalendar.Iso(camp)},{DemoCalendar.Iso(camp.PlusDays(6))},camp,,,,";
         yield return $"boat,,{DemoCalendar.Iso(DemoCalendar.DayOff(until))},,rest,,,,";
+        foreach (var part in DemoCast.All.Where(part => part.Plot == DemoPlot.LongRow))
+        {
+            foreach (var back in DemoTimeline.OffAroundTheLongRow)
+                yield return $",{part.Id},{DemoCalendar.Iso(until.PlusDays(-back))},,rest,,,,";
+        }
+
         yield return $"boat,,{DemoCalendar.Iso(regatta)},,match,,,no,rowing";
         yield return $"boat,,{DemoCalendar.Iso(regatta.PlusDays(1))},,match,,,no,rowing";
     }

@@ -15,7 +15,7 @@ public enum DemoPlot
     /// <summary>The strap gives 0 for the last three weeks; power is still there.</summary>
     StrapFailed,
 
-    /// <summary>One row of more than two hours, with a day off before and after it.</summary>
+    /// <summary>One row of more than two hours, with planned days off before and after it.</summary>
     LongRow,
 
     /// <summary>Nothing came for thirteen days.</summary>

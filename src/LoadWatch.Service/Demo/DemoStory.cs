@@ -10,11 +10,17 @@ public sealed record DemoAlert(string Person, string Rule, BodyRegion? Region, S
 /// <summary>The storyline: known before the first number is drawn.</summary>
 public static class DemoStory
 {
-    /// <summary>Every alert that stands on the last date under the shipped limits, by person and rule; nobody else has one.</summary>
+    /// <summary>Every alert that stands on the last date under the shipped limits, by person and rule; beside them only <see cref="Possible"/> ones do.</summary>
     public static IReadOnlyList<DemoAlert> Alerts { get; } =
     [
         .. DemoCast.All.SelectMany(Alert).OrderBy(alert => alert.Person, StringComparer.Ordinal).ThenBy(alert => alert.Rule, StringComparer.Ordinal),
     ];
+
+    /// <summary>
+    /// Alerts that may stand beside them, as the numbers drawn fall: the week of the row across the lake may be far above the last one, and above the usual.
+    /// </summary>
+    public static IReadOnlyList<DemoAlert> Possible { get; } =
+        [.. DemoCast.All.Where(part => part.Plot == DemoPlot.LongRow).Select(part => new DemoAlert(part.Id, "weekly_jump", null, Severity.Notice))];
 
     /// <summary>The same in words, with what leaves no alert, for a terminal.</summary>
     public static IReadOnlyList<string> Lines { get; } = [.. DemoCast.All.Select(Line).OfType<string>()];
@@ -44,7 +50,7 @@ public static class DemoStory
         DemoPlot.ArmsForWeeks => $"{part.Name} has trained arms only for more than three weeks: no heavy leg work.",
         DemoPlot.ArmsForDays => $"{part.Name} has trained arms only for about two weeks: no heavy leg work, told as a notice.",
         DemoPlot.StrapFailed => $"{part.Name}'s strap gives no heart rate for three weeks: no load rather than a wrong one, and a word about the strap.",
-        DemoPlot.LongRow => $"{part.Name} has rowed across the lake, more than twice as long as any row of the last weeks, with a day off before and after: a word about that session alone.",
+        DemoPlot.LongRow => $"{part.Name} has rowed across the lake, more than twice as long as any row of the last weeks, with planned days off before and after: a word about that session.",
         DemoPlot.SilentThirteenDays => $"{part.Name} sends nothing for thirteen days: three of the squad's planned rows without a recording.",
         DemoPlot.SilentTwoWeeks => $"{part.Name} is on holiday, and nobody was told: four classes of the plan missed.",
         DemoPlot.AwayAsTold => $"{part.Name} is away too, as staff were told: no alert.",

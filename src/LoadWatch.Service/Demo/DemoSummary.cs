@@ -6,7 +6,7 @@ namespace LoadWatch.Service.Demo;
 /// <param name="Until">The morning of the brief; the last session is of the day before.</param>
 /// <param name="Files">Count, the configuration included.</param>
 /// <param name="Story">What happens, one sentence a line.</param>
-/// <param name="Alerts">What stands on the last date under the shipped limits.</param>
+/// <param name="Alerts">What stands on the last date under the shipped limits, whatever the seed.</param>
 public sealed record DemoSummary(
     string Folder,
     LocalDate Until,

@@ -20,6 +20,12 @@ internal static class DemoTimeline
     /// <summary>First date of the absence that was told, days back.</summary>
     public const int AwayFrom = 10;
 
+    /// <summary>The row across the lake, days back.</summary>
+    public const int LongRow = 2;
+
+    /// <summary>Planned days off before and after it, days back: the week as a whole stays an ordinary one on most seeds.</summary>
+    public static readonly IReadOnlyList<int> OffAroundTheLongRow = [4, 3, 1];
+
     /// <summary>Nobody misses a session so near the end, days back.</summary>
     private const int UnbrokenDays = 42;
 
@@ -50,8 +56,8 @@ internal static class DemoTimeline
             DemoPlot.Ill when back is <= IllFrom and > IllUntil => [],
             DemoPlot.Ill when back <= IllUntil => usual.Select(slot => slot with { Minutes = slot.Minutes * 2 / 3 }),
             DemoPlot.AwayAsTold when back <= AwayFrom => [],
-            DemoPlot.LongRow when back is 1 or 3 => [],
-            DemoPlot.LongRow when back == 2 => [WeekPlan.RowAcrossTheLake(date.DayOfWeek)],
+            DemoPlot.LongRow when OffAroundTheLongRow.Contains(back) => [],
+            DemoPlot.LongRow when back == LongRow => [WeekPlan.RowAcrossTheLake(date.DayOfWeek)],
             DemoPlot.SilentThirteenDays when back <= 13 => [],
             DemoPlot.SilentTwoWeeks when back <= 14 => [],
             DemoPlot.ArmsForWeeks when date > DemoCalendar.LatestBefore(until, 25, IsoDayOfWeek.Saturday) => usual.Select(slot => slot with { Kind = SessionKind.ClassArms }),

@@ -49,7 +49,7 @@ public sealed class OpenQuestions(WorkingConfiguration configuration, Instant no
 
     private static string Sentence(string subject, List<StoredRow> rows)
     {
-        var dates = $"{rows.Count} {(rows.Count == 1 ? "row" : "rows")} from {rows.Min(row => row.Date):uuuu-MM-dd} on";
+        var dates = FormattableString.Invariant($"{rows.Count} {(rows.Count == 1 ? "row" : "rows")} from {rows.Min(row => row.Date):d MMMM uuuu} on");
         return subject.Length == 0
             ? $"{dates} name nobody, and no folder above the file does"
             : $"{dates} {(rows.Count == 1 ? "is" : "are")} of \"{subject}\", who is not in the roster: a line there, or an alias, takes {(rows.Count == 1 ? "it" : "them")} up";

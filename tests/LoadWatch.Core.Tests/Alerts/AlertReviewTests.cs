@@ -221,7 +221,7 @@ public class AlertReviewTests
     public void WhatOnlyFormerLimitsRaisedIsOverByTheirChangeAndNotCorrected()
     {
         var limits = new RuleLimits();
-        var now = new Watching(limits with { StimulusGap = new StimulusGapLimits { NoticeDays = 12 } }, DayPlan.None);
+        var now = new Watching(limits with { StimulusGap = new StimulusGapLimits { NoticeDays = 10 } }, DayPlan.None);
         var told = Alert(AlertState.Acknowledged) with { LimitsHash = RuleBook.LimitsHash(Legs.Rule, limits) };
 
         AssertChange(AlertReview.Review("anna", On(6), [told], _ => 3, [], NeverHeld, now), 4, AlertState.Acknowledged, AlertState.Normal, AlertChangeReason.LimitsChanged);

@@ -14,7 +14,7 @@ public class AnchorContradictionTests
         var observed = Observed(AnchorKind.CriticalPower, 262, 5) with { Sport = "cycling" };
 
         Assert.Equal(
-            "critical power (cycling): 240 W measured on 2026-01-12, own sessions up to 2026-02-17 show 262 W (within 5 W): the measured one is used; measure again?",
+            "critical power (cycling): 240 W measured on 12 January 2026, own sessions up to 17 February 2026 show 262 W (within 5 W): the measured one is used; measure again?",
             Assert.Single(On(observed, measured)).Words);
         Assert.Equal(240, Given.Anchors(measured, observed.ToAnchor()).On(Given.Date, "p1", AnchorKind.CriticalPower, new("cycling"))!.Value);
     }
@@ -40,7 +40,7 @@ public class AnchorContradictionTests
 
         Assert.Empty(On(observed, Given.Anchor(AnchorKind.OneRepetitionMax, 90, exercise: "leg_press")));
         Assert.Equal(
-            "one repetition max of leg press on press 2: 90 kg measured, own sessions up to 2026-02-17 show 130 kg (within 13 kg): the measured one is used; measure again?",
+            "one repetition max of leg press on press 2: 90 kg measured, own sessions up to 17 February 2026 show 130 kg (within 13 kg): the measured one is used; measure again?",
             Assert.Single(On(observed, Given.Anchor(AnchorKind.OneRepetitionMax, 90, exercise: "leg_press") with { Machine = "Press 2" })).Words);
     }
 

@@ -79,9 +79,17 @@ public class PlannedSilenceTests
         Assert.Contains(Rule.Of(days), finding => finding.Date == On(36));
     }
 
+    /// <summary>Recorded daily for 20 days, so at most three without; one session is planned after them, which alone is no silence.</summary>
     [Fact]
     public void WhereAPlanExpectsRecordingsTheOwnRhythmIsNotAsked() =>
-        Assert.Empty(Rule.Of(Enumerable.Range(0, 40).Select(day => Of(day, recorded: day < 20, expected: day is 5 or 19 or 21)).ToList()));
+        Assert.Empty(Rule.Of(Enumerable.Range(0, 40).Select(day => Of(day, recorded: day < 20, expected: day is < 20 or 21)).ToList()));
+
+    /// <summary>14 of 20 sessions are 70 %, 13 are less.</summary>
+    [Theory]
+    [InlineData(14, false)]
+    [InlineData(13, true)]
+    public void APlanThatToldFewOfTheSessionsLeavesTheOwnRhythmInForce(int told, bool asked) =>
+        Assert.Equal(asked, Rule.Of(Enumerable.Range(0, 26).Select(day => Of(day, recorded: day < 20, expected: day < told)).ToList()).Exists(finding => finding.Unit == "days"));
 
     /// <summary>Sessions on Tuesdays and Thursdays, each with a recording expected.</summary>
     private static List<Day> Weeks(int weeks, Func<int, bool> recorded) => Enumerable.Range(0, weeks * 7)

@@ -11,10 +11,11 @@ internal static class Watched
     /// <summary>The limits by which rules are tried one by one, easy to reckon with; how the built-in ones do is for the simulation to say.</summary>
     public static readonly RuleLimits Stated = new()
     {
-        LoadRatio = new() { Raise = 1.8, Return = 1.6, OnDays = 1 },
-        WeeklyJump = new() { Raise = 0.4, Return = 0.25, UsualFactor = 1.2 },
+        LoadRatio = new() { Raise = 1.8, Return = 1.6, UsualFactor = 1, OnDays = 1 },
+        WeeklyJump = new() { Raise = 0.4, Return = 0.25, UsualFactor = 1.2, UnplannedFactor = 1.2, OnDays = 2, OffDays = 1 },
         SessionSpike = new() { RunNotice = 0.1, RunWarning = 0.3, LoadNotice = 0.4, SessionsWanted = 8 },
-        FallingLoad = new() { Notice = 0.6, OnDays = 1 },
+        FallingLoad = new() { Notice = 0.6, Days = 14, OnDays = 1 },
+        StimulusGap = new() { NoticeDays = 10 },
         StimulusLow = new() { UsualShare = 0.5, OlderFloorDays = 3 },
         Silence = new() { ExtraDays = 2, PlannedMissed = 2 },
         NotUsable = new() { Sessions = 2 },

@@ -33,7 +33,7 @@ public sealed class RoomFinderTests
     /// <summary>The week before held 700: 1.4 x 700 - 720 = 260; the median, too, is 700: 1.2 x 700 - 720 = 120 binds less.</summary>
     [Fact]
     public void OfTheJumpItIsTheLargerOfBothLimitsLessTheSixDays() =>
-        Is(260, "weekly_jump", Of(None with { WeeklyJump = new() { Raise = 0.4, Return = 0.25, UsualFactor = 1.2 } }, [.. Same(100, 100), 400, .. Same(19, 100), .. Same(6, 120)]));
+        Is(260, "weekly_jump", Of(None with { WeeklyJump = new() { Raise = 0.4, Return = 0.25, UsualFactor = 1.2, UnplannedFactor = 1.2 } }, [.. Same(100, 100), 400, .. Same(19, 100), .. Same(6, 120)]));
 
     /// <summary>The largest session is 100, and one day held two of 90: 1.4 x 100 = 140.</summary>
     [Fact]

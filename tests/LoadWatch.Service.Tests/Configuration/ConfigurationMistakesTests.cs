@@ -125,7 +125,7 @@ public sealed class ConfigurationMistakesTests
         "loadwatch.json:1: limits.stimulus_gap.warning_days: 14 is below notice_days, which is 15")]
     [InlineData("""{ "limits": { "silence": { "gaps_wanted": 85 } } }""",
         "loadwatch.json:1: limits.silence.gaps_wanted: 85 gaps never fit in look_back_days, which is 84")]
-    [InlineData("""{ "limits": { "weekly_jump": { "return": 0.5 } } }""", "loadwatch.json:1: limits.weekly_jump.return: 0.5 is above raise, which is 0.3")]
+    [InlineData("""{ "limits": { "weekly_jump": { "return": 0.5 } } }""", "loadwatch.json:1: limits.weekly_jump.return: 0.5 is above raise, which is 0.2")]
     [InlineData("""{ "limits": { "weekly_jump": { "look_back_weeks": 5 } } }""",
         "loadwatch.json:1: limits.weekly_jump.weeks: 6 is above look_back_weeks, which is 5")]
     [InlineData("""{ "limits": { "session_spike": { "run_notice": 0.7 } } }""",

@@ -64,7 +64,7 @@ public sealed class DemoSweepTests : IDisposable
             .Select(alert => new DemoAlert(alert.Key.Person, alert.Key.Rule, alert.Key.Region, alert.Severity))
             .OrderBy(alert => alert.Person, StringComparer.Ordinal)
             .ThenBy(alert => alert.Rule, StringComparer.Ordinal);
-        Assert.Equal(string.Join('\n', DemoStory.Alerts), string.Join('\n', told));
+        Assert.Equal(string.Join('\n', DemoStory.Alerts), string.Join('\n', told.Except(DemoStory.Possible)));
         Assert.Equal(
             [("ilmari", "stimulus_gap")],
             standing.Where(alert => AlertLife.IsAcknowledged(alert.State)).Select(alert => (alert.Key.Person, alert.Key.Rule)));

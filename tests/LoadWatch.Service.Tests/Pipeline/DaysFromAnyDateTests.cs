@@ -23,7 +23,7 @@ public sealed class DaysFromAnyDateTests
         Converters = { new JsonStringEnumConverter(), new JsonDates<LocalDate>(LocalDatePattern.Iso) },
     };
 
-    private static readonly int Histories = int.TryParse(Environment.GetEnvironmentVariable("LOADWATCH_HISTORIES"), out var wanted) ? wanted : 12;
+    private static readonly int Histories = int.TryParse(Environment.GetEnvironmentVariable("LOADWATCH_HISTORIES"), out var wanted) ? wanted : 8;
 
     [Fact]
     public void TheyGoOnBehindAnyDate() => Gen.UInt.Sample(number =>

@@ -90,7 +90,7 @@ public sealed class ObservedAnchorsTests : IDisposable
 
         Assert.Equal(250, Value(Observed(), AnchorKind.CriticalPower));
         Assert.Equal(255, Assert.Single(Rides()[^1].Values.TimesInZone, zone => zone.Channel == Channel.Power).Bounds[1]);
-        const string Sentence = "critical power (cycling): 300 W measured on 2026-05-30, own sessions up to 2026-05-20 show 250 W (within 5 W): the measured one is used; measure again?";
+        const string Sentence = "critical power (cycling): 300 W measured on 30 May 2026, own sessions up to 20 May 2026 show 250 W (within 5 W): the measured one is used; measure again?";
         Assert.Contains(Sentence[1..], folder.Brief());
         Assert.Contains(Sentence, Explained(Shown));
         Assert.Contains("on, not used, one is measured: work on time", Explained(Shown));

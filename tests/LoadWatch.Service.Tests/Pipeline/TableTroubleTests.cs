@@ -135,7 +135,7 @@ public sealed class TableTroubleTests : IDisposable
     {
         folder.PutTable("sets.csv", 0, Named, $"{Nights.Day(1)},bo,leg_press,10,80", $"{Nights.Day(1)},Member 12,leg_press,10,90");
         folder.Sweep();
-        Assert.Contains("sets.csv: 1 row from 2026-06-13 on is of \"Member 12\"", folder.Brief(), StringComparison.Ordinal);
+        Assert.Contains("sets.csv: 1 row from 13 June 2026 on is of \"Member 12\"", folder.Brief(), StringComparison.Ordinal);
 
         folder.Edit("roster.csv", "time_zone", "time_zone,aliases");
         folder.Edit("roster.csv", "1958,f,UTC", "1958,f,UTC,member 12");

@@ -236,7 +236,7 @@ public sealed class AlertModelTests : IDisposable
         {
             StepKind.NightMuted or StepKind.NightSuppressed => new(Usual, DayPlan.None with { Absence = AbsenceWord.Away }),
             StepKind.NightRuleOff => new(Usual with { StimulusGap = new() { Enabled = false } }, DayPlan.None),
-            StepKind.NightOtherLimits => new(Usual with { StimulusGap = new() { NoticeDays = 12 } }, DayPlan.None),
+            StepKind.NightOtherLimits => new(Usual with { StimulusGap = new() { NoticeDays = 9 } }, DayPlan.None),
             _ => new(Usual, DayPlan.None),
         };
     }

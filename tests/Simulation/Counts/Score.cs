@@ -29,9 +29,9 @@ public static class Score
         .Select(change => new Raise(person.AlertOf(change.AlertId).Key, change.Date));
 
     /// <summary>By kind of episode: how many there were, how many were found, and after how many days.</summary>
-    public static IReadOnlyList<Found> Episodes(SeasonResult season) =>
+    public static IReadOnlyList<Found> Episodes(params IReadOnlyList<SeasonResult> seasons) =>
     [
-        .. season.People
+        .. seasons.SelectMany(season => season.People)
             .SelectMany(person => person.Truth.Happenings.Where(one => one.IsEpisode).Select(one => (one, First: FirstAlert(person, one))))
             .GroupBy(pair => pair.one.Kind)
             .OrderBy(kind => kind.Key)
@@ -42,9 +42,13 @@ public static class Score
                 Middle([.. kind.Where(pair => pair.First is not null).Select(pair => Period.DaysBetween(pair.one.From, pair.First!.Value)).Order()]))),
     ];
 
-    /// <summary>Alerts about the same that were raised and over again three times or more, both counted, within 7 days.</summary>
+    /// <summary>
+    /// Alerts about the same that were raised and over again three times or more, both counted, within 7 days. An alert that a planned state ended did not waver: what
+    /// was planned changed.
+    /// </summary>
     public static int Chatter(SeasonResult season) => season.People.Sum(person => person.Changes
         .Where(change => change.Date >= season.World.Counted && AlertLife.IsActive(change.From) != AlertLife.IsActive(change.To))
+        .Where(change => change.Reason != AlertChangeReason.SuppressedByPlan)
         .GroupBy(change => person.AlertOf(change.AlertId).Key)
         .Sum(key => Crowded([.. key.Select(change => change.Date)])));
 

@@ -21,8 +21,8 @@ internal sealed class PersonMaker(Person person, Habits habits, Noise noise, Gro
     {
         var week = habits.Weeks[index % habits.Weeks.Count];
         var happenings = Happenings(extra is { Kind: HappeningKind.DoubleSession } ? OnATrainingDay(extra, week) : extra).ToList();
-        var size = habits.Size * chance.Factor(0.2);
-        var swap = chance.Happens(SwapShare) ? calendar.First.PlusDays(chance.Below(Period.DaysBetween(calendar.First, calendar.Last))) : LocalDate.MaxIsoValue;
+        var size = habits.Size * chance.Stream("size").Factor(0.2);
+        var swap = Swap(chance.Stream("swap"));
         for (var date = calendar.First; date <= calendar.Last; date = date.PlusDays(1))
         {
             if (SlotOn(week, date) is { } slot && Session(slot, date, size, happenings) is { } session)
@@ -33,6 +33,10 @@ internal sealed class PersonMaker(Person person, Habits habits, Noise noise, Gro
 
         return new TruePerson(person, sessions, [.. Told(week, happenings)], happenings);
     }
+
+    /// <summary>The first date of another device.</summary>
+    private LocalDate Swap(Chance swap) =>
+        swap.Happens(SwapShare) ? calendar.First.PlusDays(swap.Below(Period.DaysBetween(calendar.First, calendar.Last))) : LocalDate.MaxIsoValue;
 
     private Happening OnATrainingDay(Happening extra, IReadOnlyList<Slot> week)
     {
@@ -53,16 +57,17 @@ internal sealed class PersonMaker(Person person, Habits habits, Noise noise, Gro
             yield return travel;
         }
 
-        for (var from = calendar.First.PlusDays(30 + chance.Below(150)); from.PlusDays(10) <= calendar.Last; from = from.PlusDays(100 + chance.Below(150)))
+        var illness = chance.Stream("illness");
+        for (var from = calendar.First.PlusDays(30 + illness.Below(150)); from.PlusDays(10) <= calendar.Last; from = from.PlusDays(100 + illness.Below(150)))
         {
-            var ill = new Happening(HappeningKind.Ill, from, from.PlusDays(chance.Between(2, 9)));
+            var ill = new Happening(HappeningKind.Ill, from, from.PlusDays(illness.Between(2, 9)));
             if (clear is null || ill.To < clear.From || ill.From > clear.To)
             {
                 yield return ill;
             }
         }
 
-        if (extra is null && chance.Happens(NeverFastShare))
+        if (extra is null && chance.Stream("never fast").Happens(NeverFastShare))
         {
             yield return new Happening(HappeningKind.NeverFast, calendar.First, calendar.Last);
         }
@@ -84,10 +89,10 @@ internal sealed class PersonMaker(Person person, Habits habits, Noise noise, Gro
 
     private TrueSession? Session(Slot slot, LocalDate date, double size, List<Happening> happenings)
     {
-        var distance = chance.Factor(noise.DistanceDeviation);
-        var rest = chance.Factor(Math.Sqrt(Math.Max(0, (noise.LoadDeviation * noise.LoadDeviation) - (noise.DistanceDeviation * noise.DistanceDeviation))));
-        var hard = chance.Between(slot.HardLow, slot.HardHigh);
-        var gone = chance.Happens(0.5);
+        var distance = chance.Stream("distance", date).Factor(noise.DistanceDeviation);
+        var rest = chance.Stream("load", date).Factor(Math.Sqrt(Math.Max(0, (noise.LoadDeviation * noise.LoadDeviation) - (noise.DistanceDeviation * noise.DistanceDeviation))));
+        var hard = chance.Stream("hard efforts", date).Between(slot.HardLow, slot.HardHigh);
+        var gone = chance.Stream("gone", date).Happens(0.5);
         var factor = 1.0;
         foreach (var happening in happenings.Where(one => one.Covers(date) || (one.Kind == HappeningKind.Fade && date > one.To)))
         {
@@ -126,8 +131,14 @@ internal sealed class PersonMaker(Person person, Habits habits, Noise noise, Gro
     /// <summary>The one session of an episode leaves a recording: what left none, nothing can find.</summary>
     private Record? Record(TrueSession session, LocalDate swap, List<Happening> happenings)
     {
+        var sensor = chance.Stream("sensor", session.Date);
+        var transfer = chance.Stream("transfer", session.Date);
         var (missing, fault, unusable, late, days) = (
-            chance.Happens(noise.Missing), chance.Happens(noise.Faults), chance.Happens(0.8), chance.Happens(noise.Late), chance.Between(1, noise.LateDays));
+            chance.Stream("missing", session.Date).Happens(noise.Missing),
+            sensor.Happens(noise.Faults),
+            sensor.Happens(0.8),
+            transfer.Happens(noise.Late),
+            transfer.Between(1, noise.LateDays));
         var sure = happenings.Exists(one => one.Kind == HappeningKind.DoubleSession && one.Covers(session.Date));
         var load = (sure, fault, unusable) switch
         {

@@ -39,9 +39,9 @@ public sealed class WorldMaker(int seed, Habits habits, Noise noise, RuleLimits 
         var calendar = Calendar(common, last);
         var made = Enumerable.Range(0, people).Select(index =>
         {
-            var chance = new Chance(seed, $"{habits.Name}/{index}");
-            var person = new Person($"{habits.Name}{index:000}", $"{habits.Name} {index:000}", habits.Name, chance.Between(habits.BirthYears.First, habits.BirthYears.Last), null, Zone);
-            return new PersonMaker(person, habits, noise, calendar, chance).Make(extra(new Chance(seed, $"{habits.Name}/{index}/extra"), index), index);
+            var chance = common.Stream($"person {index}");
+            var person = new Person($"{habits.Name}{index:000}", $"{habits.Name} {index:000}", habits.Name, chance.Stream("birth").Between(habits.BirthYears.First, habits.BirthYears.Last), null, Zone);
+            return new PersonMaker(person, habits, noise, calendar, chance).Make(extra(chance.Stream("extra"), index), index);
         });
         return new World(habits.Name, group, [.. made], First, First.PlusDays(LearningDays), last);
     }
@@ -49,13 +49,15 @@ public sealed class WorldMaker(int seed, Habits habits, Noise noise, RuleLimits 
     /// <summary>What befalls the whole group: journeys, and matches that are played a day later than planned.</summary>
     private static GroupCalendar Calendar(Chance chance, LocalDate last)
     {
+        var journeys = chance.Stream("journeys");
         var travels = new List<Happening>();
-        for (var from = First.PlusDays(LearningDays + 10 + chance.Below(30)); from.PlusDays(4) <= last; from = from.PlusDays(40 + chance.Below(30)))
+        for (var from = First.PlusDays(LearningDays + 10 + journeys.Below(30)); from.PlusDays(4) <= last; from = from.PlusDays(40 + journeys.Below(30)))
         {
-            travels.Add(Span(HappeningKind.Travel, from, chance.Between(3, 5)));
+            travels.Add(Span(HappeningKind.Travel, from, journeys.Between(3, 5)));
         }
 
-        var weeks = Enumerable.Range(0, (Period.DaysBetween(First, last) / 7) + 1).Where(_ => chance.Happens(0.1)).ToHashSet();
+        var moved = chance.Stream("moved matches");
+        var weeks = Enumerable.Range(0, (Period.DaysBetween(First, last) / 7) + 1).Where(_ => moved.Happens(0.1)).ToHashSet();
         return new GroupCalendar(First, last, travels, weeks);
     }
 
