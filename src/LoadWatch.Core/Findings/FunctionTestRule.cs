@@ -1,5 +1,7 @@
 // The latest function test against its published cut-off (FunctionTests) and against the one before of equal conditions, down by more than the error of the test (limits, a
 // choice). The better hand or try of a date counts for the cut-off, as the source has it.
+using System.Globalization;
+using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Rows;
 using NodaTime;
@@ -67,7 +69,7 @@ public sealed class FunctionTestRule : IRule
         judged.Result?.Value ?? 1,
         judged.Limit ?? 1,
         judged.Result is null ? "tests not done" : test.Unit,
-        $"{test.Name}{(judged.Result is { } result ? $" {Number(result.Value)} {test.Unit}" : "")} on {Wording.Date(judged.Date, date)}: {Why(test, judged, date)}.",
+        $"{test.Name}{(judged.Result is { } result ? $" {Number(result.Value)} {test.Unit}" : "")} on {Wording.Date(judged.Date, date)}: {Why(test, judged, date)}.{Power(judged.Result?.Power)}",
         Basis(test, judged, cutOff, limits))
     {
         Quantity = test.Word,
@@ -85,11 +87,20 @@ public sealed class FunctionTestRule : IRule
         _ => throw new ArgumentException("a judgement without what it rests on", nameof(judged)),
     };
 
+    /// <summary>A figure beside the test, without a word on what it means.</summary>
+    private static string Power(StandingUp? power) => power switch
+    {
+        { WattsPerKilogram: { } byMass, Watts: { } watts } => $" Sit-to-stand power {byMass.ToString("0.0", CultureInfo.InvariantCulture)} W/kg, {Wording.Number(watts)} W.",
+        { WattsPerKilogram: { } byMass } => $" Sit-to-stand power {byMass.ToString("0.0", CultureInfo.InvariantCulture)} W/kg.",
+        _ => "",
+    };
+
     private static string Ended(TestOutcome? outcome) => outcome == TestOutcome.UsedArms ? "done with the arms" : "could not be done";
 
     private static Evidence Basis(FunctionTest test, TestJudgement judged, double? cutOff, FunctionTestLimits limits) => new(
-        "the latest test of its kind (the better hand or try of its date) against a published cut-off, and against the latest one before with the same hand, device and chair height",
-        "Cruz-Jentoft et al. 2019, Age Ageing 48:16-31; errors of the tests: from memory, a choice",
+        "the latest test of its kind (the better hand or try of its date) against a published cut-off, and against the latest one before with the same hand, device and chair height"
+            + (judged.Result?.Power is null ? "" : $"; {StandingUp.Formula}"),
+        "Cruz-Jentoft et al. 2019, Age Ageing 48:16-31; errors of the tests: from memory, a choice" + (judged.Result?.Power is null ? "" : $"; {StandingUp.Source}"),
         [
             new("value", judged.Result?.Value, test.Unit, judged.Result is { } result ? Told(result) : $"on {Wording.IsoDate(judged.Date)}, {Ended(judged.Outcome)}"),
             new("value_before", judged.Before?.Value, test.Unit, judged.Before is { } before ? Told(before) : null),
@@ -97,7 +108,17 @@ public sealed class FunctionTestRule : IRule
             new("error", test.Error(limits), test.Unit),
             new("return_share", limits.ReturnShare, "share"),
             new("hold", limits.HoldDays, "days"),
+            .. judged.Result?.Power is { } power ? Of(power) : [],
         ]);
+
+    private static EvidenceItem[] Of(StandingUp power) =>
+    [
+        new("sit_to_stand_power", power.Watts, "W", power.Missing),
+        new("sit_to_stand_power_by_mass", power.WattsPerKilogram, "W/kg", power.WattsPerKilogram is null ? power.Missing : null),
+        new("body_mass", power.Body.MassKilograms, "kg"),
+        new("height", power.Body.HeightMetres, "m"),
+        new("chair_height", power.ChairHeightMetres, "m"),
+    ];
 
     private static string Told(TestResult result) => string.Join(
         ", ",

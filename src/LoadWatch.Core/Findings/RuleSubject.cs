@@ -61,4 +61,8 @@ public sealed record RuleSubject(Person Person, IReadOnlyList<Day> Days, RuleLim
 public sealed record QuantitySeries(string Quantity, string Unit, IReadOnlyList<Day> Days);
 
 /// <summary>A function test or reference value of a date.</summary>
-public sealed record DatedTest(LocalDate Date, TestRow Test);
+public sealed record DatedTest(LocalDate Date, TestRow Test)
+{
+    /// <summary>The person on that date; asked of chair stands alone.</summary>
+    public BodySize Body { get; init; } = BodySize.Unknown;
+}

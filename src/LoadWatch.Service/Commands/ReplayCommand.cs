@@ -72,7 +72,7 @@ public static class ReplayCommand
     private static ReplayedPerson Past(StoreSession session, WorkingConfiguration configuration, Person person)
     {
         var through = LocalDate.MaxIsoValue;
-        var tests = session.TableRows.OfPerson(person.Id, RowKind.Tests, LocalDate.MinIsoValue, through).Select(row => new DatedTest(row.Date, (TestRow)row.Content));
+        var tests = TestRows.Of(session, TableBasis.Of(configuration, session), person, LocalDate.MinIsoValue, through);
         return new ReplayedPerson(
             person,
             configuration.GroupOf(person),

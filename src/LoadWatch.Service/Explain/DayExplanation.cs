@@ -46,6 +46,7 @@ public static class DayExplanation
         RoomText.Append(text, new TodaysLimits(configuration, basis), session, known, date is null ? [day.Date, day.Date.PlusDays(1)] : [day.Date]);
         ReferenceExplanation.Append(text, known, configuration.GroupOf(known), basis, day.Date);
         ReferenceExplanation.AppendObserved(text, known, basis, day.Date);
+        TestText.Append(text, session, basis, known, day.Date);
         var recorded = session.Activities.OfPerson(known.Id, day.Date, day.Date).ToDictionary(activity => activity.Key, StringComparer.Ordinal);
         foreach (var activity in PersonTraining.Of(session, configuration, basis, known, day.Date, day.Date).Activities)
         {

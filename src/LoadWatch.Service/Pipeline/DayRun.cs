@@ -81,7 +81,7 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
     private PersonSeries Series(StoreSession session, JoinResult training, LocalDate first, LocalDate to, ReferenceChanges changes)
     {
         var since = before!.Count == 0 ? LocalDate.MinIsoValue : first;
-        var tests = session.TableRows.OfPerson(person.Id, RowKind.Tests, since, to).Select(row => new DatedTest(row.Date, (TestRow)row.Content)).ToList();
+        var tests = TestRows.Of(session, basis, person, since, to);
         var counted = training.Activities.Where(activity => activity.Date <= through);
         return PersonSeries.Continue(person, configuration.GroupOf(person), before, [.. counted], tests, plans.Of(session, person, since, to), to, changes, BestMeans(session, training, first, to));
     }

@@ -48,6 +48,36 @@ public class FunctionTestRuleTests
         Assert.Equal("Grip strength 25 kg on 8 January: below the published cut-off of 27 kg.", findings[0].Text);
     }
 
+    /// <summary>By hand: 0.9 x 9.81 x (0.825 - 0.43) m / (0.5 x 3.2 s) = 2.1797 W/kg, of 70 kg 152.6 W (Alcazar et al. 2018).</summary>
+    [Fact]
+    public void OfChairStandsThePowerStandsBesideTheFigure()
+    {
+        var finding = Evaluate(Sex.Female, Test(3, "chair_stands_5", 16, chair: 0.43) with { Body = new BodySize(70, 1.65) })[0];
+
+        Assert.Equal("Five chair stands 16 s on 8 January: above the published cut-off of 15 s. Sit-to-stand power 2.2 W/kg, 153 W.", finding.Text);
+        Assert.Equal(152.576, Item(finding, "sit_to_stand_power").Value!.Value, 3);
+        Assert.Equal(2.17966, Item(finding, "sit_to_stand_power_by_mass").Value!.Value, 5);
+        Assert.Equal((70, 1.65, 0.43), (Item(finding, "body_mass").Value, Item(finding, "height").Value, Item(finding, "chair_height").Value));
+        Assert.Contains("P = 0.9 m g (0.5 h - c) / (0.5 T / n)", finding.Evidence.Formula);
+        Assert.Contains("Alcazar et al. 2018", finding.Evidence.Source);
+        Assert.DoesNotContain(Evaluate(Sex.Male, Test(3, "grip_strength", 25))[0].Evidence.Inputs, item => item.Name.StartsWith("sit_to_stand", StringComparison.Ordinal));
+    }
+
+    [Theory]
+    [InlineData(null, null, null, "body mass and body height and the height of the seat are not known", "")]
+    [InlineData(70.0, null, 0.43, "body height is not known", "")]
+    [InlineData(70.0, 1.65, null, "the height of the seat is not known", "")]
+    [InlineData(70.0, 0.85, 0.43, "the seat is not lower than half of the body height", "")]
+    [InlineData(null, 1.65, 0.43, "body mass is not known", " Sit-to-stand power 2.2 W/kg.")]
+    public void WhatIsMissingForThePowerIsSaid(double? mass, double? height, double? chair, string missing, string told)
+    {
+        var finding = Evaluate(Sex.Female, Test(3, "chair_stands_5", 16, chair: chair) with { Body = new BodySize(mass, height) })[0];
+
+        Assert.Equal($"Five chair stands 16 s on 8 January: above the published cut-off of 15 s.{told}", finding.Text);
+        Assert.Equal((null, missing), (Item(finding, "sit_to_stand_power").Value, Item(finding, "sit_to_stand_power").Note));
+        Assert.Equal(told == "", Item(finding, "sit_to_stand_power_by_mass").Value is null);
+    }
+
     [Fact]
     public void TheBetterHandCounts() => Assert.Empty(Evaluate(Sex.Male, Test(3, "grip_strength", 25, "left"), Test(3, "grip_strength", 29, "right")));
 
@@ -199,4 +229,6 @@ public class FunctionTestRuleTests
         var days = Enumerable.Range(0, 20).Select(day => new Day { Person = "anna", Date = On(day), State = DayState.Unknown }).ToList();
         return new FunctionTestRule().Evaluate(new RuleSubject(Anna with { Sex = sex }, days, limits) { Tests = tests }).ToList();
     }
+
+    private static EvidenceItem Item(Finding finding, string name) => finding.Evidence.Inputs.Single(item => item.Name == name);
 }

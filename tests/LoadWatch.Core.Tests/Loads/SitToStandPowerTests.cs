@@ -1,3 +1,4 @@
+using LoadWatch.People;
 using LoadWatch.Rows;
 
 namespace LoadWatch.Loads;
@@ -28,6 +29,35 @@ public class SitToStandPowerTests
         Assert.Null(SitToStandPower.Watts(Row("chair_stands_30_s", 0, 0.43), 70, 1.65));
         Assert.Null(SitToStandPower.Watts(Row("gait_speed", 1, 0.43), 70, 1.65));
         Assert.Null(SitToStandPower.Watts(Row("chair_stands_5", 12, 0.43) with { Outcome = TestOutcome.UsedArms }, 70, 1.65));
+    }
+
+    [Fact]
+    public void ThePowerIsToldWithWhatItRestsOn()
+    {
+        var power = StandingUp.Of(Row("chair_stands_30_s", 15, 0.43), new BodySize(70, 1.65))!;
+
+        Assert.Equal(244.1219, power.Watts!.Value, 5.1e-5);
+        Assert.Equal(3.487455, power.WattsPerKilogram!.Value, 5.1e-7);
+        Assert.Null(power.Missing);
+        Assert.Equal("there was no rise", StandingUp.Of(Row("chair_stands_30_s", 0, 0.43), new BodySize(70, 1.65))!.Missing);
+        Assert.Null(StandingUp.Of(Row("gait_speed", 1, 0.43), new BodySize(70, 1.65)));
+        Assert.Null(StandingUp.Of(Row("chair_stands_5", 12, 0.43) with { Outcome = TestOutcome.UsedArms }, new BodySize(70, 1.65)));
+    }
+
+    [Fact]
+    public void TheBodyIsThatOfTheDate()
+    {
+        var (monday, anchors) = (new NodaTime.LocalDate(2026, 1, 5), new AnchorBook(
+        [
+            new Anchor("anna", null, AnchorKind.Height, 1.65, AnchorSource.Measured),
+            new Anchor("anna", new NodaTime.LocalDate(2026, 1, 5), AnchorKind.BodyMass, 70, AnchorSource.Measured),
+            new Anchor("anna", new NodaTime.LocalDate(2026, 2, 5), AnchorKind.BodyMass, 68, AnchorSource.Measured),
+        ]));
+
+        Assert.Equal(new BodySize(null, 1.65), BodySize.On(anchors, monday.PlusDays(-1), "anna"));
+        Assert.Equal(new BodySize(70, 1.65), BodySize.On(anchors, monday, "anna"));
+        Assert.Equal(new BodySize(68, 1.65), BodySize.On(anchors, monday.PlusDays(60), "anna"));
+        Assert.Equal(BodySize.Unknown, BodySize.On(anchors, monday, "bo"));
     }
 
     private static TestRow Row(string test, double? value, double? chair) => new(test, value, null, null, null, null, null, null, chair);

@@ -256,5 +256,8 @@ internal sealed class RandomHistory
         Below(8) == 0 ? TestOutcome.Unable : null,
         null,
         null,
-        null));
+        0.43))
+    {
+        Body = date.Day % 2 == 0 ? new BodySize(70, 1.6) : BodySize.Unknown,
+    };
 }
