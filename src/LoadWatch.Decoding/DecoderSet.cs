@@ -56,8 +56,11 @@ public sealed class DecoderSet(IReadOnlyList<CsvLayout> layouts, ContainerLimits
         _ => Refused("unknown", bytes.IsEmpty ? "the file is empty" : "not a FIT, CSV, gzip or zip file"),
     };
 
-    /// <inheritdoc cref="CsvDecoder.Decode(Func{Stream}, IReadOnlyList{CsvLayout})"/>
-    public DecodedFile DecodeText(Func<Stream> open) => CsvDecoder.Decode(open, layouts);
+    /// <inheritdoc cref="CsvDecoder.Open(Func{Stream}, IReadOnlyList{CsvLayout})"/>
+    public TextContent OpenText(Func<Stream> open) => CsvDecoder.Open(open, layouts);
+
+    /// <inheritdoc cref="CsvDecoder.Open(ReadOnlyMemory{byte}, IReadOnlyList{CsvLayout})"/>
+    public TextContent OpenText(ReadOnlyMemory<byte> bytes) => CsvDecoder.Open(bytes, layouts);
 
     /// <inheritdoc cref="CsvDecoder.Read"/>
     public CsvReadThrough ReadText(Func<Stream> open, Action<Recording> take) => CsvDecoder.Read(open, layouts, take);

@@ -26,74 +26,63 @@ public static class UnitOutliers
     public static DecodedFile LeaveOut(DecodedFile file)
     {
         ArgumentNullException.ThrowIfNull(file);
-        var speeds = Speeds(file.Recordings);
-        var outliers = speeds.Count > OthersWanted
-            ? speeds.Select(one => (one.Subject, Times: Times(one, speeds))).Where(one => one.Times is not null).ToList()
-            : [];
+        var speeds = new SpeedTally();
+        foreach (var recording in file.Recordings)
+        {
+            speeds.Add(recording);
+        }
+
+        return LeaveOut(file, Of(speeds));
+    }
+
+    /// <inheritdoc cref="LeaveOut(DecodedFile)"/>
+    /// <param name="outliers">Who they are.</param>
+    public static DecodedFile LeaveOut(DecodedFile file, IReadOnlyList<UnitOutlier> outliers)
+    {
+        ArgumentNullException.ThrowIfNull(file);
+        ArgumentNullException.ThrowIfNull(outliers);
         return outliers.Count == 0 ? file : file with
         {
-            Recordings = [.. file.Recordings.Select(recording =>
-                outliers.Exists(one => one.Subject == recording.Subject) ? WithoutSpeed(recording) : recording)],
-            Problems = [.. file.Problems, .. outliers.Select(one => Warning(one.Subject, one.Times!.Value))],
+            Recordings = [.. file.Recordings.Select(recording => LeaveOut(recording, outliers))],
+            Problems = [.. file.Problems, .. outliers.Select(Warning)],
         };
     }
 
-    private static List<SubjectSpeed> Speeds(IReadOnlyList<Recording> recordings)
+    /// <summary>The people of a file whose speeds seem to be in another unit, in the order of the file.</summary>
+    public static IReadOnlyList<UnitOutlier> Of(SpeedTally speeds)
     {
-        // One list for all, one after the other: a squad's match holds more than a million readings.
-        var moving = new List<double>();
-        var byPerson = recordings.Where(recording => recording.Subject is not null && recording.Samples.Has(Channel.Speed)).GroupBy(recording => recording.Subject!);
-        return [.. byPerson.Select(ofOne => SubjectSpeed.Of(ofOne.Key, ofOne, moving)).OfType<SubjectSpeed>()];
+        ArgumentNullException.ThrowIfNull(speeds);
+        var all = speeds.People.Where(person => speeds.Median(person) is not null).ToList();
+        return all.Count > OthersWanted
+            ? [.. all.Select(person => (Person: person, Times: Times(person, all, speeds))).Where(one => one.Times is not null).Select(one => new UnitOutlier(one.Person, one.Times!.Value))]
+            : [];
     }
 
-    private static double? Times(SubjectSpeed one, List<SubjectSpeed> all)
+    /// <summary>The recording without speed and distance where it is of such a person, else itself.</summary>
+    public static Recording LeaveOut(Recording recording, IReadOnlyList<UnitOutlier> outliers)
     {
-        var others = all.Where(other => other != one).Select(other => other.Median).Order().ToList();
-        var times = one.Median / SubjectSpeed.Share(others, 0.5);
-        return times > TimesTheOthers && one.High > HighSpeed ? times : null;
+        ArgumentNullException.ThrowIfNull(recording);
+        return !outliers.Any(one => one.Subject == recording.Subject) ? recording : recording with
+        {
+            Samples = recording.Samples.Without(Channel.Speed, Channel.Distance),
+            DistanceMetres = null,
+        };
     }
 
-    private static Recording WithoutSpeed(Recording recording) => recording with
-    {
-        Samples = recording.Samples.Without(Channel.Speed, Channel.Distance),
-        DistanceMetres = null,
-    };
-
-    private static Problem Warning(string subject, double times) => new(
+    private static Problem Warning(UnitOutlier outlier) => new(
         ProblemSeverity.Warning,
         string.Create(
             CultureInfo.InvariantCulture,
-            $"{subject}: speeds {times:0.0} times those of the others: another unit? Neither speed nor distance is used"));
+            $"{outlier.Subject}: speeds {outlier.TimesTheOthers:0.0} times those of the others: another unit? Neither speed nor distance is used"));
 
-    /// <summary>How fast one person moved, over all rows that the file has of them.</summary>
-    /// <param name="Median">Of the readings from <see cref="MovingFrom"/> on, m/s.</param>
-    /// <param name="High">Their 99th percentile, m/s.</param>
-    private sealed record SubjectSpeed(string Subject, double Median, double High)
+    private static double? Times(string person, List<string> all, SpeedTally speeds)
     {
-        public static SubjectSpeed? Of(string subject, IEnumerable<Recording> recordings, List<double> moving)
-        {
-            moving.Clear();
-            foreach (var recording in recordings)
-            {
-                AddMoving(moving, recording.Samples[Channel.Speed]);
-            }
-
-            moving.Sort();
-            return moving.Count == 0 ? null : new SubjectSpeed(subject, Share(moving, 0.5), Share(moving, 0.99));
-        }
-
-        /// <summary>The value at a share of a sorted row: the nearest rank.</summary>
-        public static double Share(List<double> sorted, double share) => sorted[Math.Max(0, (int)Math.Ceiling(share * sorted.Count) - 1)];
-
-        private static void AddMoving(List<double> moving, ReadOnlySpan<double> speeds)
-        {
-            foreach (var speed in speeds)
-            {
-                if (speed >= MovingFrom)
-                {
-                    moving.Add(speed);
-                }
-            }
-        }
+        var others = all.Where(other => other != person).Select(other => speeds.Median(other)!.Value).Order().ToList();
+        var times = speeds.Median(person) / others[Math.Max(0, (int)Math.Ceiling(0.5 * others.Count) - 1)];
+        return times > TimesTheOthers && speeds.High(person) > HighSpeed ? times : null;
     }
 }
+
+/// <param name="Subject">As the file writes the person.</param>
+/// <param name="TimesTheOthers">The person's median of moving speed to that of the others' medians.</param>
+public sealed record UnitOutlier(string Subject, double TimesTheOthers);

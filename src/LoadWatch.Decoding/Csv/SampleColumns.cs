@@ -14,12 +14,33 @@ internal sealed class SampleColumns
     /// <summary>The latest time, milliseconds since 1970; null without a row.</summary>
     public long? Latest { get; private set; }
 
+    /// <summary>The earliest time, milliseconds since 1970; null without a row.</summary>
+    public long? Earliest { get; private set; }
+
+    public static SampleColumns Of(SampleSeries series)
+    {
+        var columns = new SampleColumns();
+        var readings = new double[columns.values.Length];
+        for (var row = 0; row < series.Count; row++)
+        {
+            for (var channel = 0; channel < readings.Length; channel++)
+            {
+                readings[channel] = series[(Channel)channel] is { IsEmpty: false } column ? column[row] : double.NaN;
+            }
+
+            columns.Add(series.UnixMilliseconds[row], readings);
+        }
+
+        return columns;
+    }
+
     /// <param name="unixMilliseconds">Time of the row.</param>
     /// <param name="readings">By channel number; NaN for none.</param>
     public void Add(long unixMilliseconds, ReadOnlySpan<double> readings)
     {
         times.Set(Count, unixMilliseconds);
         Latest = Latest > unixMilliseconds ? Latest : unixMilliseconds;
+        Earliest = Earliest < unixMilliseconds ? Earliest : unixMilliseconds;
         for (var channel = 0; channel < values.Length; channel++)
         {
             if (CutMark.IsTaken(readings[channel]))

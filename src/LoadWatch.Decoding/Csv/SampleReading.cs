@@ -1,13 +1,21 @@
 using System.Text;
 using LoadWatch.Recordings;
+using NodaTime;
+using NodaTime.Text;
 
 namespace LoadWatch.Decoding.Csv;
 
-/// <summary>Reads the rows of one file by one layout.</summary>
+/// <summary>Reads the rows of one file by one layout; no more of them are held at once than <see cref="RowsHeld"/>.</summary>
 internal sealed class SampleReading
 {
     /// <summary>A day at 20 Hz and more, or 25 people for two hours at 10 Hz; with every channel filled the columns stay near 110 MB.</summary>
-    public const int RowsAtMost = 2_000_000;
+    public const int RowsHeld = 2_000_000;
+
+    // Where making room frees fewer, it would be made at every other row.
+    private const int RoomWanted = RowsHeld / 64;
+
+    // Of that many rows one of a person is to be expected, where the person goes on.
+    private const int RowsOfAbsence = RowsHeld / 4;
 
     // A squad for a season; without a limit a file of rows an hour apart would give a recording a row.
     private const int RecordingsAtMost = 2_000;
@@ -23,17 +31,21 @@ internal sealed class SampleReading
     private readonly ReadingCells readings;
     private readonly SportCell sport;
     private readonly byte[] timeName;
-    private readonly Action<Recording>? take;
+    private readonly HandingOn handingOn;
+    private readonly Queue<Recording> ended = new();
+    private readonly List<Problem> leftOut = [];
     private long goodRows;
     private long openRows;
+    private long changes;
+    private SampleSubject? before;
     private int recordings;
 
     /// <param name="table">The file.</param>
     /// <param name="layout">Of samples.</param>
-    /// <param name="take">Gets each recording of a person as it ends, so that no more than the sessions under way are held. Null: all are kept to the end.</param>
-    public SampleReading(CsvTable table, CsvLayout layout, Action<Recording>? take = null)
+    /// <param name="handingOn">When recordings leave it.</param>
+    public SampleReading(CsvTable table, CsvLayout layout, HandingOn handingOn)
     {
-        this.take = take;
+        this.handingOn = handingOn;
         this.table = table;
         this.layout = layout;
         clock = new RowClock(table, layout);
@@ -43,57 +55,121 @@ internal sealed class SampleReading
         timeName = Encoding.UTF8.GetBytes(layout.Time.Column);
     }
 
+    /// <summary>What was read, without the recordings; known once all of them were asked for.</summary>
+    public DecodedFile? File { get; private set; }
+
     /// <summary>The file cannot be used, whatever was handed on before that was seen.</summary>
     public bool IsRefused { get; private set; }
 
-    private int Most => take is null ? RecordingsAtMost : HandedOnAtMost;
+    /// <summary>More rows than can be held: from now on every recording is cut at long gaps and numbered as it leaves. Known before the first of them does.</summary>
+    public bool IsLong { get; private set; }
 
-    public DecodedFile Read()
+    private int Most => IsLong || handingOn == HandingOn.AsTheyEnd ? HandedOnAtMost : RecordingsAtMost;
+
+    /// <summary>The recordings; to be asked for once.</summary>
+    public IEnumerable<Recording> Read()
     {
-        if ((ReadRows() ?? TooManyBad()) is { } refusal)
+        Problem? refusal = null;
+        using (var rows = table.Rows())
         {
-            return Refused(refusal);
+            while (refusal is null && rows.Next())
+            {
+                refusal = Take(rows);
+                while (ended.TryDequeue(out var recording))
+                {
+                    yield return recording;
+                }
+            }
+
+            refusal ??= rows.Fault ?? TooManyBad();
         }
 
-        var kept = new List<Recording>();
+        if (refusal is not null)
+        {
+            File = Refused(refusal);
+            yield break;
+        }
+
         foreach (var subject in subjects.InOrder.Where(one => one.Samples.Count > 0).TakeWhile(_ => recordings <= Most))
         {
-            HandOn(subject, take ?? kept.Add);
+            HandOn(subject);
+            while (ended.TryDequeue(out var recording))
+            {
+                yield return recording;
+            }
         }
 
-        return recordings <= Most
-            ? new("csv", FileType: null, layout.Name, kept, [.. problems.Close(), .. clock.Warnings()])
+        File = recordings <= Most
+            ? new("csv", FileType: null, layout.Name, [], [.. leftOut, .. problems.Close(), .. clock.Warnings()])
             : Refused(TooManyRecordings());
     }
 
-    /// <summary>Null once all rows are read, else why the file cannot be used.</summary>
-    private Problem? ReadRows()
+    /// <summary>Null where reading can go on, else why the file cannot be used.</summary>
+    private Problem? Take(CsvRows rows)
     {
-        using var rows = table.Rows();
-        while (rows.Next())
+        if (HoldsNothing(rows))
         {
-            if (HoldsNothing(rows))
-            {
-                continue;
-            }
-
-            if (openRows == RowsAtMost)
-            {
-                return Refusal($"more than {RowsAtMost} rows{(take is null ? "" : " of sessions that have not ended")}", rows.Line);
-            }
-
-            if (recordings > Most)
-            {
-                return TooManyRecordings();
-            }
-
-            if (ReadRow(rows) is { } problem && PutAside(rows, problem) is { } refusal)
-            {
-                return refusal;
-            }
+            return null;
         }
 
-        return rows.Fault;
+        if (openRows >= RowsHeld && MakeRoom(rows) is { } full)
+        {
+            return full;
+        }
+
+        if (recordings > Most)
+        {
+            return TooManyRecordings();
+        }
+
+        return ReadRow(rows) is { } problem ? PutAside(rows, problem) : null;
+    }
+
+    /// <summary>
+    /// Hands on what has ended: first all sessions but the one of each person that the last row is of, then those of people who seem to be gone. A session that
+    /// fills the memory alone is left out.
+    /// </summary>
+    private Problem? MakeRoom(CsvRows rows)
+    {
+        if (handingOn == HandingOn.AtTheEnd)
+        {
+            return Refusal($"more than {RowsHeld} rows", rows.Line);
+        }
+
+        IsLong = true;
+        foreach (var subject in subjects.InOrder.Where(one => one.HasGap))
+        {
+            openRows -= subject.Samples.Count;
+            HandOn(subject, subject.EndAllButLast(Most - recordings));
+            openRows += subject.Samples.Count;
+        }
+
+        if (IsFull)
+        {
+            subjects.InOrder.Where(one => one.Samples.Count > 0 && IsGone(one)).ToList().ForEach(HandOn);
+        }
+
+        if (IsFull && subjects.InOrder.MaxBy(one => one.Samples.Count) is { } longest && longest.Samples.Count >= RowsHeld / 2)
+        {
+            LeaveOut(longest, rows);
+        }
+
+        return IsFull ? Refusal($"more than {RowsHeld} rows of sessions that are under way at the same time: cut the file by person or by time", rows.Line) : null;
+    }
+
+    private bool IsFull => openRows > RowsHeld - RoomWanted;
+
+    /// <summary>Whether no row of a person has come for long, although time went on, or although rows stand person by person.</summary>
+    private bool IsGone(SampleSubject subject) => goodRows - subject.LastRow > RowsOfAbsence
+        && (Math.Abs(before!.LastTime - subject.LastTime) > SessionGaps.LongestMilliseconds || changes - subject.LastChange <= subjects.InOrder.Count);
+
+    private void LeaveOut(SampleSubject subject, CsvRows rows)
+    {
+        var whose = subject.Name is { } name ? $" of {name}" : "";
+        var start = Instant.FromUnixTimeMilliseconds(subject.Samples.Earliest!.Value);
+        leftOut.Add(Refusal($"the recording{whose} that begins at {InstantPattern.General.Format(start)} is left out: {subject.Samples.Count} rows until here without a pause of 60 min are too many to be held", rows.Line));
+        openRows -= subject.Samples.Count;
+        subject.LeaveOut();
     }
 
     /// <summary>Lists a row that gives no sample; not null where the file cannot be used because of it.</summary>
@@ -135,7 +211,7 @@ internal sealed class SampleReading
 
         if (subjects.Of(rows, out var problem) is not { } subject
             || clock.Read(rows, subject.Clock, out problem) is not { } time
-            || (problem = readings.Take(rows) ?? EndSession(rows, subject, time.ToUnixTimeMilliseconds())) is not null)
+            || (problem = readings.Take(rows) ?? TooLate(rows, subject, time.ToUnixTimeMilliseconds())) is not null)
         {
             return problem;
         }
@@ -146,32 +222,30 @@ internal sealed class SampleReading
         }
 
         clock.Accept(time, subject.Clock, rows);
-        subject.Samples.Add(time.ToUnixTimeMilliseconds(), readings.Values);
         goodRows++;
-        openRows++;
+        changes += before == subject ? 0 : 1;
+        before = subject;
+        Add(subject, time.ToUnixTimeMilliseconds());
         return null;
     }
 
-    /// <summary>Hands a session on before the first row of the next; not null for a row that comes too late for one that is gone.</summary>
-    private Problem? EndSession(CsvRows rows, SampleSubject subject, long time)
+    private void Add(SampleSubject subject, long time)
     {
-        if (take is null || subject.Name is null)
+        if (handingOn == HandingOn.AsTheyEnd && subject.Name is not null && subject.IsBeyond(time))
         {
-            return null;
+            HandOn(subject);
         }
 
-        if (time - subject.EndedAt <= SessionGaps.LongestMilliseconds)
+        if (subject.Add(time, readings.Values, goodRows, changes))
         {
-            return Refusal("of a session whose rows had come to an end above: a file so large is read in the order of time", rows.Line);
+            openRows++;
         }
-
-        if (time - subject.Samples.Latest > SessionGaps.LongestMilliseconds)
-        {
-            HandOn(subject, take);
-        }
-
-        return null;
     }
+
+    /// <summary>Not null for a row of a session that is gone.</summary>
+    private static Problem? TooLate(CsvRows rows, SampleSubject subject, long time) => subject.IsGone(time)
+        ? Refusal("of a session whose rows had come to an end above: a file so large is read in the order of its sessions", rows.Line)
+        : null;
 
     private Problem? ShapeProblem(CsvRows rows)
     {
@@ -229,12 +303,18 @@ internal sealed class SampleReading
         };
     }
 
-    private void HandOn(SampleSubject subject, Action<Recording> taker)
+    /// <summary>All that is held of a person. Rows of a file without names are one recording as long as they can be held.</summary>
+    private void HandOn(SampleSubject subject)
     {
         openRows -= subject.Samples.Count;
-        foreach (var series in subject.End(subject.Name is null ? null : times => SessionGaps.Sessions(times, Math.Max(1, Most - recordings))))
+        HandOn(subject, subject.End(IsLong || subject.Name is not null ? Most - recordings : null));
+    }
+
+    private void HandOn(SampleSubject subject, IEnumerable<SampleSeries> sessions)
+    {
+        foreach (var series in sessions)
         {
-            taker(ToRecording(++recordings, subject, series));
+            ended.Enqueue(ToRecording(++recordings, subject, series));
         }
     }
 
@@ -256,7 +336,7 @@ internal sealed class SampleReading
     private DecodedFile Refused(Problem refusal)
     {
         IsRefused = true;
-        return new("csv", FileType: null, layout.Name, [], [refusal, .. problems.Close()]);
+        return new("csv", FileType: null, layout.Name, [], [refusal, .. leftOut, .. problems.Close()]);
     }
 
     private Problem TooManyRecordings() =>
@@ -265,4 +345,17 @@ internal sealed class SampleReading
     private Problem WrongCount(CsvRows rows) => Refusal($"{rows.CellCount} cells for {table.Names.Count} columns", rows.Line);
 
     private static Problem Refusal(string reason, long line) => new(ProblemSeverity.Error, reason, Line: line);
+}
+
+/// <summary>When the recordings of a file leave it.</summary>
+internal enum HandingOn
+{
+    /// <summary>Once all rows are read; a file with more of them than can be held is refused.</summary>
+    AtTheEnd,
+
+    /// <summary>The same, but of a file with more rows those that have ended as soon as room is wanted.</summary>
+    WhenFull,
+
+    /// <summary>Those of named people with the first row of their next.</summary>
+    AsTheyEnd,
 }

@@ -84,33 +84,3 @@ internal sealed class SampleSubjects(CsvTable table, CsvLayout layout)
         return added;
     }
 }
-
-/// <summary>The rows of one person or device.</summary>
-/// <param name="name">As the file writes it; null where it tells none apart.</param>
-/// <param name="cell">The bytes that named it first.</param>
-internal sealed class SampleSubject(string? name, byte[] cell)
-{
-    public string? Name => name;
-
-    public ReadOnlySpan<byte> Cell => cell;
-
-    /// <summary>Who came after it when it was last followed by another.</summary>
-    public SampleSubject? Next { get; set; }
-
-    public ClockTrack Clock { get; } = new();
-
-    /// <summary>The rows of the session under way, or of all that are not handed on yet.</summary>
-    public SampleColumns Samples { get; private set; } = new();
-
-    /// <summary>The latest row handed on, milliseconds since 1970; null before the first.</summary>
-    public long? EndedAt { get; private set; }
-
-    /// <inheritdoc cref="SampleColumns.ToSeries"/>
-    public IReadOnlyList<SampleSeries> End(Func<long[], IReadOnlyList<int[]>?>? sessionsOf)
-    {
-        EndedAt = Samples.Latest;
-        var ended = Samples;
-        Samples = new SampleColumns();
-        return ended.ToSeries(sessionsOf);
-    }
-}

@@ -3,6 +3,7 @@ using System.Security.Cryptography;
 using System.Text;
 using LoadWatch.Decoding;
 using LoadWatch.Decoding.Containers;
+using LoadWatch.Decoding.Csv;
 using LoadWatch.Recordings;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
@@ -120,7 +121,7 @@ public static class InspectCommand
     {
         try
         {
-            return Of(name, decoders.DecodeText(() => SafeFile.Reopen(name)));
+            return Of(name, decoders.OpenText(() => SafeFile.Reopen(name)));
         }
         catch (IOException)
         {
@@ -170,8 +171,14 @@ public static class InspectCommand
                 : [];
         }
 
-        return Of(content.Path, reading.Decoders.Decode(content.Bytes, reading.Salvages));
+        return content.Kind == ContentKind.Text
+            ? Of(content.Path, reading.Decoders.OpenText(content.Bytes))
+            : Of(content.Path, reading.Decoders.Decode(content.Bytes, reading.Salvages));
     }
+
+    private static IEnumerable<InspectLine> Of(string path, TextContent text) => text.IsLong
+        ? text.Recordings().Select(recording => InspectLine.Of(path, text.File, recording)).ToList()
+        : Of(path, text.File);
 
     private static IEnumerable<InspectLine> Of(string path, DecodedFile file) => file.Recordings.Count == 0
         ? [InspectLine.WithoutRecording(path, file.Kind, file.Problems) with { Table = TableText(file.Table) }]

@@ -1,5 +1,6 @@
 using LoadWatch.Activities;
 using LoadWatch.Decoding;
+using LoadWatch.Decoding.Csv;
 using LoadWatch.People;
 using LoadWatch.Recordings;
 using LoadWatch.Rows;
@@ -52,27 +53,47 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
             return new DecodedArrival(content.Sha, kind, ContainerVerdict(content), []);
         }
 
-        var file = DecodeFile(content, salvages);
+        var read = ReadContent(content, salvages);
+        var file = read.File;
         if (Subjects(file) is { Count: > 0 } subjects && (subjects.Count > 1 || claims.Count == 0))
         {
-            return OfSeveral(content, file, subjects);
+            return OfSeveral(content, read, subjects);
         }
 
         var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings.Concat(file.Worn), now, configuration.Devices, configuration.People);
         var verdict = OfTheRoster(ArrivalVerdict.Of(file, owners, now));
-        var cut = verdict.Person is not null && file.Table is null ? Usable(file).Select(Cut).ToList() : [];
-        if (!decided && Implausible(cut, verdict) is { } reason)
+        var recordings = new List<ComputedRecording>();
+        if (verdict.Person is { } owner && file.Table is null && OfOwner(content, read, configuration.People[owner], decided, recordings) is { } reason)
         {
+            recordings.Clear();
             verdict = new ArrivalVerdict(ArrivalState.Held, reason, null);
         }
 
-        var recordings = verdict.Person is { } owner ? cut.Select(usable => Compute(content.Sha, usable, configuration.People[owner], file.SourceName)) : [];
-        return new DecodedArrival(content.Sha, file.Kind, verdict, recordings.ToList())
+        return new DecodedArrival(content.Sha, file.Kind, verdict, recordings)
         {
+            Through = read.Through,
             Problems = Problems(file),
             Table = verdict.State == ArrivalState.Stored ? file.Table : null,
             Questions = verdict.State == ArrivalState.Stored && file is { Table: not null, Worn.Count: 0 } ? RowsNotUsed(file.Problems) : [],
         };
+    }
+
+    /// <summary>Computes the recordings of one owner, one after the other.</summary>
+    /// <returns>Why the file cannot be the owner's, by the first of its recordings that says so; else null.</returns>
+    private string? OfOwner(ArrivalContent content, ReadContents read, Person owner, bool decided, List<ComputedRecording> computed)
+    {
+        foreach (var recording in Usable(read))
+        {
+            var usable = Cut(recording);
+            if (!decided && Implausible(usable, owner) is { } reason)
+            {
+                return reason;
+            }
+
+            computed.Add(Compute(content.Sha, usable, owner, read));
+        }
+
+        return null;
     }
 
     /// <summary>One question a table, however many of its rows cannot be used.</summary>
@@ -94,13 +115,16 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         [.. file.Recordings.Select(recording => recording.Subject).OfType<string>().Distinct(StringComparer.Ordinal)];
 
     /// <summary>A file of several people: each recording is its person's; those of nobody are asked about and leave the others alone.</summary>
-    private DecodedArrival OfSeveral(ArrivalContent content, DecodedFile file, IReadOnlyList<string> subjects)
+    private DecodedArrival OfSeveral(ArrivalContent content, ReadContents read, IReadOnlyList<string> subjects)
     {
-        var owned = Usable(file).Select(recording => (Recording: recording, Person: OwnerOf(recording))).ToList();
+        var file = read.File;
         var recordings = new List<ComputedRecording>();
         var questions = new List<string>();
-        foreach (var (recording, person) in owned)
+        var dated = 0;
+        foreach (var recording in Usable(read))
         {
+            dated++;
+            var person = OwnerOf(recording);
             if (person is null)
             {
                 questions.Add($"\"{recording.Subject}\" is not in the roster: a line there, an alias or a line in devices.csv takes the recording up");
@@ -111,16 +135,17 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
             }
             else
             {
-                recordings.Add(Compute(content.Sha, usable, person, file.SourceName));
+                recordings.Add(Compute(content.Sha, usable, person, read));
             }
         }
 
         var asked = questions.Distinct(StringComparer.Ordinal).ToList();
         var verdict = recordings.Count > 0
             ? new ArrivalVerdict(ArrivalState.Stored, asked.Concat(file.Problems.Select(problem => problem.ToString())).FirstOrDefault(), null)
-            : new ArrivalVerdict(ArrivalState.Held, owned.Count == 0 ? "no recording with a date" : $"owner unknown: none of the {subjects.Count} people in it is in the roster", null);
+            : new ArrivalVerdict(ArrivalState.Held, dated == 0 ? "no recording with a date" : $"owner unknown: none of the {subjects.Count} people in it is in the roster", null);
         return new DecodedArrival(content.Sha, file.Kind, verdict, recordings)
         {
+            Through = read.Through,
             Problems = Problems(file),
             Questions = recordings.Count > 0 ? asked : [],
         };
@@ -134,12 +159,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     private Person? ByDevice(Recording recording, string serial) =>
         Attribution.Owners(recording, serial, configuration.Devices, configuration.People) is [var only] ? only : null;
 
-    private IEnumerable<Recording> Usable(DecodedFile file) => file.Recordings.Where(recording => ArrivalVerdict.IsUsable(recording, now));
-
-    /// <summary>Why a file cannot be its owner's, by the first of its recordings that says so.</summary>
-    private string? Implausible(IEnumerable<UsableRecording> recordings, ArrivalVerdict verdict) => verdict.Person is { } id && configuration.People.TryGetValue(id, out var person)
-        ? recordings.Select(recording => Implausible(recording, person)).FirstOrDefault(reason => reason is not null)
-        : null;
+    private IEnumerable<Recording> Usable(ReadContents read) => read.Recordings().Where(recording => ArrivalVerdict.IsUsable(recording, now));
 
     private string? Implausible(UsableRecording recording, Person person) =>
         Plausibility.Of(recording, person, Basis.AnchorsOf(person), LocalStart.DateOf(recording.Recording, person));
@@ -155,8 +175,12 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     public ArrivalContent Read(Arrival arrival, string path) =>
         LargeText.In(archive, arrival.ObjectSha, path) ?? Content(arrival, path, archive.Read(arrival.ObjectSha));
 
-    private DecodedFile DecodeFile(ArrivalContent content, bool salvages = false) =>
-        content.Open is { } open ? decoders.DecodeText(open) : decoders.Decode(content.Bytes, salvages);
+    private ReadContents ReadContent(ArrivalContent content, bool salvages = false) => content switch
+    {
+        { Open: { } open } => new ReadContents(decoders.OpenText(open)),
+        { Kind: ContentKind.Text } => new ReadContents(decoders.OpenText(content.Bytes)),
+        _ => new ReadContents(decoders.Decode(content.Bytes, salvages)),
+    };
 
     private ArrivalContent Content(Arrival arrival, string path, byte[] original) =>
         places.Find(arrival.ObjectSha, path, original, arrival.Sha)
@@ -165,23 +189,23 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     /// <summary>What a stored table holds.</summary>
     /// <exception cref="InvalidDataException">The archive does not hold it any more, or it is no table as layouts are now.</exception>
     public DecodedTable ReadTable(Arrival arrival) =>
-        DecodeFile(Read(arrival, "")).Table ?? throw new InvalidDataException($"{arrival.Sha[..12]} is no table");
+        ReadContent(Read(arrival, "")).File.Table ?? throw new InvalidDataException($"{arrival.Sha[..12]} is no table");
 
     /// <summary>The recordings of a stored arrival, read back from the archive; none where its original is missing or damaged.</summary>
-    public IReadOnlyList<Recording> ReadRecordings(Arrival arrival)
+    public RecordingsAtHand ReadRecordings(Arrival arrival)
     {
         try
         {
             if (LargeText.In(archive, arrival.ObjectSha, "") is { } large)
             {
-                return archive.Verify(arrival.ObjectSha) ? DecodeFile(large).Recordings : [];
+                return archive.Verify(arrival.ObjectSha) ? ReadContent(large).AtHand() : RecordingsAtHand.None;
             }
 
-            return originals.ReadWhole(arrival.ObjectSha) is { } bytes ? DecodeFile(Content(arrival, "", bytes), Salvages(arrival.Sha)).Recordings : [];
+            return originals.ReadWhole(arrival.ObjectSha) is { } bytes ? ReadContent(Content(arrival, "", bytes), Salvages(arrival.Sha)).AtHand() : RecordingsAtHand.None;
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException or InvalidDataException)
         {
-            return [];
+            return RecordingsAtHand.None;
         }
     }
 
@@ -194,8 +218,8 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
 
     private UsableRecording Cut(Recording recording) => new(recording, configuration.Computation.UsableShareWanted, configuration.Computation.Quality);
 
-    private ComputedRecording Compute(string sha, UsableRecording usable, Person person, string? sourceName) =>
-        new(RecordingSummaries.Of(sha, usable, person, sourceName), usable.Recording, Values(usable, person));
+    private ComputedRecording Compute(string sha, UsableRecording usable, Person person, ReadContents read) =>
+        new(RecordingSummaries.Of(sha, usable, person, read.File.SourceName), read.Through is null ? usable.Recording : null, Values(usable, person));
 
     private ActivityValues Values(UsableRecording usable, Person person)
     {
@@ -219,4 +243,24 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         var (whole, broken) => new ArrivalVerdict(
             ArrivalState.Refused, $"{broken} of the {whole + broken} files in it; the others are taken. The first: {content.Problems[0]}", null),
     };
+
+    /// <summary>A content as read.</summary>
+    /// <param name="File">What it holds, without the samples where it is long.</param>
+    /// <param name="Through">Reads the recordings where they are too many to be held; else null.</param>
+    private sealed record ReadContents(DecodedFile File, TextContent? Through)
+    {
+        public ReadContents(DecodedFile file)
+            : this(file, null)
+        {
+        }
+
+        public ReadContents(TextContent text)
+            : this(text.File, text.IsLong ? text : null)
+        {
+        }
+
+        public IEnumerable<Recording> Recordings() => Through?.Recordings() ?? File.Recordings;
+
+        public RecordingsAtHand AtHand() => Through is { } text ? new RecordingsAtHand(text) : new RecordingsAtHand(File.Recordings);
+    }
 }

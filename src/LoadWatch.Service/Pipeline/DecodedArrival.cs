@@ -1,4 +1,5 @@
 using LoadWatch.Activities;
+using LoadWatch.Decoding.Csv;
 using LoadWatch.Recordings;
 using LoadWatch.Rows;
 
@@ -12,6 +13,9 @@ public sealed record DecodedArrival(string Sha, string Kind, ArrivalVerdict Verd
     /// <summary>Where stored and a table: what it holds. Its rows are taken up once everything of the group is settled (<see cref="Tables"/>).</summary>
     public DecodedTable? Table { get; init; }
 
+    /// <summary>Reads the recordings where they are too many to be held; else null.</summary>
+    public TextContent? Through { get; init; }
+
     /// <summary>What is wrong with the content, with the place of each: the first <see cref="MostProblems"/>, then how many more.</summary>
     public IReadOnlyList<string> Problems { get; init; } = [];
 
@@ -22,5 +26,6 @@ public sealed record DecodedArrival(string Sha, string Kind, ArrivalVerdict Verd
     public IReadOnlyList<string> Questions { get; init; } = [];
 }
 
+/// <param name="Recording">Null in a long content: its samples were let go once they were computed from.</param>
 /// <param name="Values">Of the recording as an activity by itself.</param>
-public sealed record ComputedRecording(RecordingSummary Summary, Recording Recording, ActivityValues Values);
+public sealed record ComputedRecording(RecordingSummary Summary, Recording? Recording, ActivityValues Values);

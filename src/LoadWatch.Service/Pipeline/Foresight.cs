@@ -1,5 +1,6 @@
 using LoadWatch.Activities;
 using LoadWatch.Storage;
+using LoadWatch.Storage.Recordings;
 
 namespace LoadWatch.Service.Pipeline;
 
@@ -12,8 +13,16 @@ public sealed class Foresight(Store store, RecordingShelf shelf, SessionValues v
     public void LookAhead(IReadOnlyList<DecodedArrival> decoded)
     {
         var plans = store.Read(session => Merged(session, decoded));
-        values.Foresee(plans.AsParallel().AsOrdered().Select(plan => (plan, values.Of(plan, sha => store.Read(session => session.Arrivals.Get(sha))))).ToList());
+        var longOnes = plans.ToLookup(plan => plan.Givers.Select(key => shelf.PlaceInLong(key, ArrivalOf)).FirstOrDefault(place => place is not null));
+        values.Foresee(longOnes[null].AsParallel().AsOrdered().Select(plan => (plan, values.Of(plan, ArrivalOf))).ToList());
+
+        // In the order of the file, which is read once for all of them.
+        values.Foresee(longOnes.Where(plan => plan.Key is not null).OrderBy(plan => plan.Key!.Value.Sha, StringComparer.Ordinal).ThenBy(plan => plan.Key!.Value.Part)
+            .SelectMany(plan => plan).Select(plan => (plan, values.Of(plan, ArrivalOf))).ToList());
+        shelf.Close();
     }
+
+    private Arrival? ArrivalOf(string sha) => store.Read(session => session.Arrivals.Get(sha));
 
     private List<SessionPlan> Merged(StoreSession session, IReadOnlyList<DecodedArrival> decoded)
     {

@@ -35,7 +35,7 @@ public sealed class SessionPlanning(StoreSession session, RecordingShelf shelf, 
         while (true)
         {
             var plans = SessionPlans.Of(group, replaced, unreadable);
-            var missing = plans.Where(isWanted).SelectMany(plan => plan.Givers).Where(key => shelf.Find(key, ArrivalOf) is null).ToList();
+            var missing = plans.Where(isWanted).SelectMany(plan => plan.Givers).Where(key => !shelf.Has(key, ArrivalOf)).ToList();
             if (missing.Count == 0)
             {
                 return plans;

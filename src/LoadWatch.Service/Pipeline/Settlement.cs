@@ -41,13 +41,13 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
         var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims, item.IsDecided, item.Salvages)).ToList();
         var before = pending.ToDictionary(item => item.Content.Sha, item => item.Before, StringComparer.Ordinal);
         var shelf = new RecordingShelf(decoder);
-        decoded.ForEach(arrival => arrival.Recordings.ToList().ForEach(shelf.Add));
+        decoded.ForEach(shelf.Add);
         var values = new SessionValues(decoder, shelf);
         new Foresight(store, shelf, values).LookAhead(decoded);
         KillPoint.Pass("decoded");
         Finish();
         inCommit = seen.Select(item => item.Content.Sha).ToHashSet(StringComparer.Ordinal);
-        committing = Task.Run(() => Commit(seen, decoded, before, alongside, session => new ArrivalEffects(session, shelf, values)));
+        committing = Task.Run(() => Commit(seen, decoded, before, alongside, shelf, values));
     }
 
     /// <summary>Does something once everything that began is durable.</summary>
@@ -74,17 +74,19 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
         List<DecodedArrival> decoded,
         Dictionary<string, ArrivalState?> before,
         Action<StoreSession> alongside,
-        Func<StoreSession, ArrivalEffects> effectsIn)
+        RecordingShelf shelf,
+        SessionValues values)
     {
         store.Write(session =>
         {
             alongside(session);
             RecordMembers(session, seen);
-            var effects = effectsIn(session);
+            var effects = new ArrivalEffects(session, shelf, values);
             decoded.ForEach(effects.Apply);
             seen.Select(item => item.Content.Sha).Distinct(StringComparer.Ordinal).ToList().ForEach(effects.TouchNames);
             effects.Finish();
         });
+        shelf.Close();
         foreach (var arrival in decoded.Where(arrival => before[arrival.Sha] != arrival.Verdict.State))
         {
             report.Count(arrival.Verdict.State);
