@@ -15,8 +15,6 @@ public static class ActivityComputation
     /// <summary>Raised by one whenever a formula, a cut or a quantity changes: what an older program computed is then computed again.</summary>
     public const int Version = 9;
 
-    private static readonly Channel[] WithBestMeans = [Channel.HeartRate, Channel.Power, Channel.Speed];
-
     /// <summary>Anchors are taken as they hold on the recording's local date.</summary>
     /// <exception cref="ArgumentException">The recording carries no date.</exception>
     public static ActivityValues Compute(Recording recording, Person person, AnchorBook anchors, ComputationSettings settings) =>
@@ -41,20 +39,13 @@ public static class ActivityComputation
             UsableShare = usable.Channels.Values.ToDictionary(channel => channel.Channel, channel => Significant.Round(channel.Share)),
             Cuts = usable.Cuts,
             Histograms = usable.Histograms,
-            BestMeans = Best(valid),
+            BestMeans = valid.BestMeans, // Of what no reference value has cut, since reference values are told from them.
             TimesInZone = loads.TimesInZone,
             Quantities = loads.Quantities,
             Stimulus = stimulus.Regions,
             Remarks = [.. usable.TooLittle.Select(TooLittle), .. loads.Remarks, .. stimulus.Remarks, .. loads.HistogramRemarks],
         };
     }
-
-    /// <summary>Of what no reference value has cut, since reference values are told from them.</summary>
-    private static Dictionary<Channel, BestMeans> Best(UsableRecording usable) => WithBestMeans
-        .Where(channel => usable[channel] is not null)
-        .Select(channel => (Channel: channel, Means: BestMeans.Of(usable[channel]!)))
-        .Where(one => one.Means.Values.Count > 0)
-        .ToDictionary(one => one.Channel, one => one.Means);
 
     /// <summary>Without what is too far above the person's maximum; where none is known all of it stays.</summary>
     private static UsableRecording UpToMaximum(UsableRecording cut, HeartRateMaximum? maximum, QualityLimits limits) =>

@@ -1,3 +1,4 @@
+using LoadWatch.Capacity;
 using LoadWatch.Quality;
 using LoadWatch.Recordings;
 
@@ -10,6 +11,7 @@ public sealed class UsableRecording
 
     private readonly double shareWanted;
     private readonly JudgedRecording judged;
+    private readonly Lazy<IReadOnlyDictionary<Channel, BestMeans>> bestMeans;
 
     /// <param name="limits">Null for the defaults.</param>
     public UsableRecording(Recording recording, double shareWanted, QualityLimits? limits = null)
@@ -27,6 +29,11 @@ public sealed class UsableRecording
         Histograms = Counted
             .Where(channel => this[channel] is not null)
             .ToDictionary(channel => channel, channel => ChannelHistogram.Of(Channels[channel]));
+        bestMeans = new(() => Counted
+            .Where(channel => this[channel] is not null)
+            .Select(channel => (Channel: channel, Means: Capacity.BestMeans.Of(this[channel]!)))
+            .Where(one => one.Means.Values.Count > 0)
+            .ToDictionary(one => one.Channel, one => one.Means));
     }
 
     public Recording Recording { get; }
@@ -36,6 +43,9 @@ public sealed class UsableRecording
 
     /// <summary>Of heart rate, power and speed, where usable.</summary>
     public IReadOnlyDictionary<Channel, Histogram> Histograms { get; }
+
+    /// <summary>Of heart rate, power and speed, where usable. Found when asked for first.</summary>
+    public IReadOnlyDictionary<Channel, BestMeans> BestMeans => bestMeans.Value;
 
     /// <summary>What of it does not count: whole rows and time without rows first, then by channel, reason and time.</summary>
     public IReadOnlyList<Cut> Cuts => [.. judged.RowCuts, .. Channels.OrderBy(one => one.Key).SelectMany(one => one.Value.Cuts)];

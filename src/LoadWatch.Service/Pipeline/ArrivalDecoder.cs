@@ -1,4 +1,5 @@
 using LoadWatch.Activities;
+using LoadWatch.Capacity;
 using LoadWatch.Decoding;
 using LoadWatch.Decoding.Csv;
 using LoadWatch.People;
@@ -25,32 +26,48 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     /// <summary>Whether a stored content was seen where files that were cut off are used.</summary>
     public Func<string, bool> Salvages { get; init; } = _ => false;
 
-    /// <summary>Never fails for what the content holds: one that breaks the computation is refused, and the others go on (I-10).</summary>
+    /// <summary>Never fails for what the content holds: one that breaks the program is refused, and the others go on (I-10).</summary>
     /// <param name="claims">Ids of the people whom all sightings of the content name, or the one whom a decision names; where none, the devices or the content itself tell.</param>
     /// <param name="decided">A decision names the owner: then nobody asks whether the recordings can be theirs.</param>
     /// <param name="salvages">Whether it was seen where files that were cut off are used.</param>
-    public DecodedArrival Decode(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided, bool salvages)
+    public JudgedArrival Judge(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided, bool salvages)
     {
         try
         {
-            return DecodeSound(content, claims, decided, salvages);
+            return JudgeSound(content, claims, decided, salvages);
         }
         catch (Exception e) when (IsDefect(e))
         {
-            var reason = $"a defect of LoadWatch, please report it: {e.GetType().Name} while it was computed";
-            return new DecodedArrival(content.Sha, Words.Of(content.Kind), new ArrivalVerdict(ArrivalState.Refused, reason, null), []);
+            return new JudgedArrival(Broken(content.Sha, Words.Of(content.Kind), e), []);
         }
     }
+
+    /// <summary>With all values of its recordings. Never fails either.</summary>
+    public DecodedArrival Compute(JudgedArrival judged)
+    {
+        try
+        {
+            var computed = judged.Kept.Select(kept => new ComputedRecording(kept.Summary, kept.Usable.Recording, Values(kept.Usable, kept.Owner, Basis)));
+            return judged.Arrival with { Recordings = [.. judged.Arrival.Recordings, .. computed] };
+        }
+        catch (Exception e) when (IsDefect(e))
+        {
+            return Broken(judged.Arrival.Sha, judged.Arrival.Kind, e);
+        }
+    }
+
+    private static DecodedArrival Broken(string sha, string kind, Exception defect) => new(
+        sha, kind, new ArrivalVerdict(ArrivalState.Refused, $"a defect of LoadWatch, please report it: {defect.GetType().Name} while it was computed", null), []);
 
     /// <summary>What only a fault of the program throws while it computes.</summary>
     public static bool IsDefect(Exception e) => e is ArithmeticException or ArgumentException or InvalidOperationException or IndexOutOfRangeException;
 
-    private DecodedArrival DecodeSound(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided, bool salvages)
+    private JudgedArrival JudgeSound(ArrivalContent content, IReadOnlyCollection<string> claims, bool decided, bool salvages)
     {
         var kind = Words.Of(content.Kind);
         if (content.Kind is ContentKind.Gzip or ContentKind.Zip)
         {
-            return new DecodedArrival(content.Sha, kind, ContainerVerdict(content), []);
+            return new JudgedArrival(new DecodedArrival(content.Sha, kind, ContainerVerdict(content), []), []);
         }
 
         var read = ReadContent(content, salvages);
@@ -62,25 +79,27 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
 
         var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings.Concat(file.Worn), now, configuration.Devices, configuration.People);
         var verdict = OfTheRoster(ArrivalVerdict.Of(file, owners, now));
-        var recordings = new List<ComputedRecording>();
-        if (verdict.Person is { } owner && file.Table is null && OfOwner(content, read, configuration.People[owner], decided, recordings) is { } reason)
+        var (kept, computed) = (new List<KeptRecording>(), new List<ComputedRecording>());
+        if (verdict.Person is { } owner && file.Table is null && OfOwner(content, read, configuration.People[owner], decided, kept, computed) is { } reason)
         {
-            recordings.Clear();
+            kept.Clear();
+            computed.Clear();
             verdict = new ArrivalVerdict(ArrivalState.Held, reason, null);
         }
 
-        return new DecodedArrival(content.Sha, file.Kind, verdict, recordings)
+        var arrival = new DecodedArrival(content.Sha, file.Kind, verdict, computed)
         {
             Through = read.Through,
             Problems = Problems(file),
             Table = verdict.State == ArrivalState.Stored ? file.Table : null,
             Questions = verdict.State == ArrivalState.Stored && file is { Table: not null, Worn.Count: 0 } ? RowsNotUsed(file.Problems) : [],
         };
+        return new JudgedArrival(arrival, kept);
     }
 
-    /// <summary>Computes the recordings of one owner, one after the other.</summary>
+    /// <summary>Judges the recordings of one owner, one after the other.</summary>
     /// <returns>Why the file cannot be the owner's, by the first of its recordings that says so; else null.</returns>
-    private string? OfOwner(ArrivalContent content, ReadContents read, Person owner, bool decided, List<ComputedRecording> computed)
+    private string? OfOwner(ArrivalContent content, ReadContents read, Person owner, bool decided, List<KeptRecording> kept, List<ComputedRecording> computed)
     {
         foreach (var recording in Usable(read))
         {
@@ -90,7 +109,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
                 return reason;
             }
 
-            computed.Add(Compute(content.Sha, usable, owner, read));
+            Take(content.Sha, usable, owner, read, kept, computed);
         }
 
         return null;
@@ -115,10 +134,10 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         [.. file.Recordings.Select(recording => recording.Subject).OfType<string>().Distinct(StringComparer.Ordinal)];
 
     /// <summary>A file of several people: each recording is its person's; those of nobody are asked about and leave the others alone.</summary>
-    private DecodedArrival OfSeveral(ArrivalContent content, ReadContents read, IReadOnlyList<string> subjects)
+    private JudgedArrival OfSeveral(ArrivalContent content, ReadContents read, IReadOnlyList<string> subjects)
     {
         var file = read.File;
-        var recordings = new List<ComputedRecording>();
+        var (kept, computed) = (new List<KeptRecording>(), new List<ComputedRecording>());
         var questions = new List<string>();
         var dated = 0;
         foreach (var recording in Usable(read))
@@ -135,20 +154,21 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
             }
             else
             {
-                recordings.Add(Compute(content.Sha, usable, person, read));
+                Take(content.Sha, usable, person, read, kept, computed);
             }
         }
 
         var asked = questions.Distinct(StringComparer.Ordinal).ToList();
-        var verdict = recordings.Count > 0
+        var verdict = kept.Count + computed.Count > 0
             ? new ArrivalVerdict(ArrivalState.Stored, asked.Concat(file.Problems.Select(problem => problem.ToString())).FirstOrDefault(), null)
             : new ArrivalVerdict(ArrivalState.Held, dated == 0 ? "no recording with a date" : $"owner unknown: none of the {subjects.Count} people in it is in the roster", null);
-        return new DecodedArrival(content.Sha, file.Kind, verdict, recordings)
+        var arrival = new DecodedArrival(content.Sha, file.Kind, verdict, computed)
         {
             Through = read.Through,
             Problems = Problems(file),
-            Questions = recordings.Count > 0 ? asked : [],
+            Questions = kept.Count + computed.Count > 0 ? asked : [],
         };
+        return new JudgedArrival(arrival, kept);
     }
 
     private Person? OwnerOf(Recording recording) =>
@@ -210,7 +230,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     }
 
     /// <summary>Everything computed from a recording of a person of the roster: of the part within the planned session, where the plan has its time.</summary>
-    public ActivityValues Values(Recording recording, string person) => Values(Cut(recording), configuration.People[person]);
+    public ActivityValues Values(Recording recording, string person, TableBasis basis) => Values(Cut(recording), configuration.People[person], basis);
 
     /// <summary>Makes one recording of those of an activity, each by the quality cuts of the configuration; null where none gives anything.</summary>
     public Recording? Merged(SessionPlan plan, IReadOnlyDictionary<string, Recording> recordings) =>
@@ -218,17 +238,34 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
 
     private UsableRecording Cut(Recording recording) => new(recording, configuration.Computation.UsableShareWanted, configuration.Computation.Quality);
 
-    private ComputedRecording Compute(string sha, UsableRecording usable, Person person, ReadContents read) =>
-        new(RecordingSummaries.Of(sha, usable, person, read.File.SourceName), read.Through is null ? usable.Recording : null, Values(usable, person));
+    /// <summary>What is too long to be held is computed at once, and its samples let go.</summary>
+    private void Take(string sha, UsableRecording usable, Person owner, ReadContents read, List<KeptRecording> kept, List<ComputedRecording> computed)
+    {
+        if (read.Through is null)
+        {
+            kept.Add(Keep(sha, usable, owner, read.File.SourceName));
+        }
+        else
+        {
+            computed.Add(new ComputedRecording(RecordingSummaries.Of(sha, usable, owner, read.File.SourceName), null, Values(usable, owner, Basis)));
+        }
+    }
 
-    private ActivityValues Values(UsableRecording usable, Person person)
+    private static KeptRecording Keep(string sha, UsableRecording usable, Person person, string? sourceName)
+    {
+        var summary = RecordingSummaries.Of(sha, usable, person, sourceName);
+        var means = person.HeartRateIsValidOn(summary.Date) ? usable.BestMeans : usable.BestMeans.Where(one => one.Key != Channel.HeartRate).ToDictionary();
+        return new KeptRecording(summary, usable, person, new SessionBests(summary.Key, summary.Date, summary.Sport, means));
+    }
+
+    private ActivityValues Values(UsableRecording usable, Person person, TableBasis basis)
     {
         var recording = usable.Recording;
-        var planned = Basis.Planned(person, LocalStart.DateOf(recording, person));
+        var planned = basis.Planned(person, LocalStart.DateOf(recording, person));
         var cut = SessionWindow.Of(recording, planned) is { } window ? RecordingCut.To(recording, window.Start, window.End) : CutRecording.Nothing(recording);
         var values = cut.LeftOut.Count == 0
-            ? ActivityComputation.Compute(usable, person, Basis.AnchorsOf(person), configuration.Computation)
-            : ActivityComputation.Compute(cut.Recording, person, Basis.AnchorsOf(person), configuration.Computation);
+            ? ActivityComputation.Compute(usable, person, basis.AnchorsOf(person), configuration.Computation)
+            : ActivityComputation.Compute(cut.Recording, person, basis.AnchorsOf(person), configuration.Computation);
         IReadOnlyList<string> missing = recording.CutOff is { } reason ? [$"only its beginning is used: {reason}"] : [];
         return cut.LeftOut.Count + missing.Count == 0
             ? values

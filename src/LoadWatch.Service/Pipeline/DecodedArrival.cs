@@ -1,5 +1,7 @@
 using LoadWatch.Activities;
+using LoadWatch.Capacity;
 using LoadWatch.Decoding.Csv;
+using LoadWatch.People;
 using LoadWatch.Recordings;
 using LoadWatch.Rows;
 
@@ -25,6 +27,15 @@ public sealed record DecodedArrival(string Sha, string Kind, ArrivalVerdict Verd
     /// <summary>What staff would have to say so that all of it counts.</summary>
     public IReadOnlyList<string> Questions { get; init; } = [];
 }
+
+/// <summary>An arrival decoded and judged.</summary>
+/// <param name="Arrival">What becomes of it; with recordings only where they are too many to be held, which are computed as they are read.</param>
+/// <param name="Kept">Where stored: its recordings that are yet to be computed.</param>
+public sealed record JudgedArrival(DecodedArrival Arrival, IReadOnlyList<KeptRecording> Kept);
+
+/// <summary>A recording that has an owner, after the quality cuts.</summary>
+/// <param name="Bests">Of the recording as an activity by itself.</param>
+public sealed record KeptRecording(RecordingSummary Summary, UsableRecording Usable, Person Owner, SessionBests Bests);
 
 /// <param name="Recording">Null in a long content: its samples were let go once they were computed from.</param>
 /// <param name="Values">Of the recording as an activity by itself.</param>

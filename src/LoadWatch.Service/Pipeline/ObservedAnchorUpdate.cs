@@ -18,11 +18,6 @@ public sealed class ObservedAnchorUpdate(WorkingConfiguration configuration, Sto
 {
     private const int PeopleInOneCommit = 20;
 
-    /// <summary>A recording's local date and the date of its start in UTC are one apart at most, and a reference value is asked for on either side of midnight.</summary>
-    private const int NearDays = 2;
-
-    private static readonly Instant End = Instant.FromUtc(9999, 1, 1, 0, 0);
-
     /// <summary>Dates through which people are computed, by person, where it is not the last date that is over for them.</summary>
     public IReadOnlyDictionary<string, LocalDate> Through { get; init; } = new Dictionary<string, LocalDate>();
 
@@ -34,10 +29,10 @@ public sealed class ObservedAnchorUpdate(WorkingConfiguration configuration, Sto
         foreach (var people in Behind().Chunk(PeopleInOneCommit))
         {
             cancel.ThrowIfCancellationRequested();
-            var found = people.AsParallel().AsOrdered().Select(item => Observe(item.Person, item.First, item.Last, basis)).OfType<Changes>().ToList();
+            var found = people.AsParallel().AsOrdered().Select(item => Observe(item.Person, item.First, item.Last, basis)).OfType<ObservedChanges>().ToList();
             if (found.Count > 0)
             {
-                store.Write(session => found.ForEach(one => one.Write(session)));
+                store.Write(session => found.ForEach(one => { one.Write(session); }));
                 found.FindAll(one => one.Spans.Count > 0).ForEach(one => changed[one.Person] = one.Spans.Min(span => span.From));
             }
         }
@@ -72,17 +67,11 @@ public sealed class ObservedAnchorUpdate(WorkingConfiguration configuration, Sto
         return ObservedAnchors.MonthBehind(dates.Min()!.Value);
     }
 
-    private Changes? Observe(Person person, LocalDate first, LocalDate last, TableBasis basis)
+    private ObservedChanges? Observe(Person person, LocalDate first, LocalDate last, TableBasis basis)
     {
         var (standing, now) = store.Read(session => (session.ObservedAnchors.OfPerson(person.Id), Observed(session, person, first, last)));
-        List<ObservedAnchor> wanted = [.. standing.Where(one => one.From < first), .. now];
-        return wanted.ToHashSet().SetEquals(standing)
-            ? null
-            : new Changes(person.Id, first, now, [.. ObservedChange.Between(standing, wanted).Where(change => Matters(change, basis.StatedOf(person)))]);
+        return ObservedChanges.Between(person.Id, first, standing, now, basis.StatedOf(person));
     }
-
-    /// <summary>A measured value goes before an observed one for ever; but a maximal power counts for some months only, however it came about.</summary>
-    private static bool Matters(ObservedChange change, AnchorBook stated) => change.Anchor.Kind == AnchorKind.PowerMax || stated.MeasuredOn(change.From, change.Anchor) is null;
 
     private IReadOnlyList<ObservedAnchor> Observed(StoreSession session, Person person, LocalDate first, LocalDate last)
     {
@@ -102,21 +91,5 @@ public sealed class ObservedAnchorUpdate(WorkingConfiguration configuration, Sto
         ];
         return ObservedAnchors.Of(
             person, configuration.Computation.Equations.HeartRateMaxByAge, session.Activities.Bests(person.Id, since, last), [.. maxima], session.ObservedAnchors.OfPerson(person.Id), from, last);
-    }
-
-    /// <summary>What of a person changed.</summary>
-    private sealed record Changes(string Person, LocalDate First, IReadOnlyList<ObservedAnchor> Anchors, IReadOnlyList<ObservedChange> Spans)
-    {
-        public void Write(StoreSession session)
-        {
-            session.ObservedAnchors.Replace(Person, First, Anchors);
-            foreach (var span in Spans)
-            {
-                session.Outdated.AddRecordings(Person, Near(span.From, -NearDays), span.Before is { } before ? Near(before, NearDays) : End);
-                session.People.MarkDirty(Person, span.From);
-            }
-        }
-
-        private static Instant Near(LocalDate date, int days) => date.PlusDays(days).AtMidnight().InUtc().ToInstant();
     }
 }

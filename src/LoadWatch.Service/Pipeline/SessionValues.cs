@@ -9,6 +9,9 @@ public sealed class SessionValues(ArrivalDecoder decoder, RecordingShelf shelf)
 {
     private readonly Dictionary<string, (SessionPlan Plan, ActivityValues Values)> foreseen = new(StringComparer.Ordinal);
 
+    /// <summary>The group behind may be decoded by other reference values while this one commits.</summary>
+    private readonly TableBasis basis = decoder.Basis;
+
     /// <summary>Computed before the transaction that will ask for them; where it plans otherwise they are not used.</summary>
     public void Foresee(IEnumerable<(SessionPlan Plan, ActivityValues Values)> computed)
     {
@@ -40,7 +43,7 @@ public sealed class SessionValues(ArrivalDecoder decoder, RecordingShelf shelf)
         try
         {
             var recordings = plan.Givers.ToDictionary(key => key, key => shelf.Find(key, arrivalOf)!, StringComparer.Ordinal);
-            var values = decoder.Merged(plan, recordings) is { } merged ? decoder.Values(merged, plan.Winner.Person) : new ActivityValues();
+            var values = decoder.Merged(plan, recordings) is { } merged ? decoder.Values(merged, plan.Winner.Person, basis) : new ActivityValues();
             return WithRemarks(plan, values with { Remarks = [.. MergedSession.Partial(plan, values), .. values.Remarks] });
         }
         catch (Exception e) when (ArrivalDecoder.IsDefect(e))

@@ -4,6 +4,7 @@ using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Recordings;
+using NodaTime;
 
 namespace LoadWatch.Service.Pipeline;
 
@@ -13,8 +14,12 @@ namespace LoadWatch.Service.Pipeline;
 /// </summary>
 public sealed class Settlement(WorkingConfiguration configuration, Store store, ArrivalDecoder decoder, SweepReport report)
 {
+    private readonly ObservedAhead ahead = new(configuration, store);
     private Task committing = Task.CompletedTask;
     private HashSet<string> inCommit = new(StringComparer.Ordinal);
+
+    /// <summary>Ids of people with the first date from which on other reference values hold now for what is stored of them.</summary>
+    public IReadOnlyDictionary<string, LocalDate> AskedAgain => ahead.AskedAgain;
 
     /// <param name="force">Decode and judge again even where nothing about the arrival changed.</param>
     public void Settle(IReadOnlyList<SeenContent> seen, bool force) => Settle(seen, force, [], _ => { });
@@ -38,7 +43,9 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
         }
 
         var pending = store.Read(session => Pending(session, seen, force, gone));
-        var decoded = pending.AsParallel().AsOrdered().Select(item => decoder.Decode(item.Content, item.Claims, item.IsDecided, item.Salvages)).ToList();
+        var judged = pending.AsParallel().AsOrdered().Select(item => decoder.Judge(item.Content, item.Claims, item.IsDecided, item.Salvages)).ToList();
+        var observe = Observe(judged, force);
+        var decoded = judged.AsParallel().AsOrdered().Select(decoder.Compute).ToList();
         var before = pending.ToDictionary(item => item.Content.Sha, item => item.Before, StringComparer.Ordinal);
         var shelf = new RecordingShelf(decoder);
         decoded.ForEach(shelf.Add);
@@ -47,7 +54,20 @@ public sealed class Settlement(WorkingConfiguration configuration, Store store, 
         KillPoint.Pass("decoded");
         Finish();
         inCommit = seen.Select(item => item.Content.Sha).ToHashSet(StringComparer.Ordinal);
-        committing = Task.Run(() => Commit(seen, decoded, before, alongside, shelf, values));
+        committing = Task.Run(() => Commit(seen, decoded, before, observe + alongside, shelf, values));
+    }
+
+    /// <summary>What is computed again shows what it showed before, and what is too long to be held is computed already: by the reference values that stand.</summary>
+    private Action<StoreSession> Observe(IReadOnlyList<JudgedArrival> judged, bool force)
+    {
+        if (force || judged.Any(one => one.Arrival.Through is not null))
+        {
+            ahead.Forget();
+            return _ => { };
+        }
+
+        (decoder.Basis, var write) = ahead.Look(judged, decoder.Basis);
+        return write;
     }
 
     /// <summary>Does something once everything that began is durable.</summary>

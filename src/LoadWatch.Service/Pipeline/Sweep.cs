@@ -76,6 +76,7 @@ public sealed class Sweep
         recovery.Run(cancel);
         intake.TakeIn(Inboxes.Changed(configuration, store, Looks, known, now, Report), cancel);
         moved.TakeUp();
+        new Renewal(configuration, store, decoder.Basis).Run(settlement.AskedAgain);
         var patience = IsFromNothing ? Patience.Endless : new Patience(RecomputesFor);
         Recompute(patience, cancel);
         Report.Take(store.Write(answers.TakeUp));

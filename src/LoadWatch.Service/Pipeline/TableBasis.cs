@@ -19,12 +19,14 @@ public sealed class TableBasis
     private readonly WorkingConfiguration configuration;
     private readonly Action<Action<StoreSession>> read;
     private readonly ConcurrentDictionary<string, AnchorBook> anchors = new(StringComparer.Ordinal);
-    private readonly ConcurrentDictionary<(string Person, LocalDate Month), IReadOnlyList<PlanEntry>> planned = new();
+    private readonly ConcurrentDictionary<(string Person, LocalDate Month), IReadOnlyList<PlanEntry>> planned;
 
-    private TableBasis(WorkingConfiguration configuration, Action<Action<StoreSession>> read)
+    private TableBasis(
+        WorkingConfiguration configuration, Action<Action<StoreSession>> read, ConcurrentDictionary<(string Person, LocalDate Month), IReadOnlyList<PlanEntry>>? planned = null)
     {
         this.configuration = configuration;
         this.read = read;
+        this.planned = planned ?? new();
     }
 
     /// <summary>The configuration alone.</summary>
@@ -41,11 +43,31 @@ public sealed class TableBasis
     public static TableBasis Of(WorkingConfiguration configuration, StoreSession session) => new(configuration, work => work(session));
 
     /// <summary>A person's reference values, of the configuration, of the tables and from own sessions.</summary>
-    public AnchorBook AnchorsOf(Person person) => anchors.GetOrAdd(person.Id, _ =>
+    public AnchorBook AnchorsOf(Person person) => anchors.GetOrAdd(person.Id, _ => Book(person, ObservedOf(person)));
+
+    private AnchorBook Book(Person person, IReadOnlyList<ObservedAnchor> observed)
     {
-        var (stated, observed) = (StatedOf(person), ObservedOf(person));
+        var stated = StatedOf(person);
         return observed.Count == 0 ? stated : stated.OfPerson(person.Id).With(observed.Select(one => one.ToAnchor()));
-    });
+    }
+
+    /// <summary>The same with other values from own sessions of some people.</summary>
+    /// <param name="observed">All of a person, by id.</param>
+    public TableBasis With(IReadOnlyDictionary<string, IReadOnlyList<ObservedAnchor>> observed)
+    {
+        var other = new TableBasis(configuration, read, planned);
+        foreach (var (person, book) in anchors.Where(one => !observed.ContainsKey(one.Key)))
+        {
+            other.anchors[person] = book;
+        }
+
+        foreach (var (person, own) in observed)
+        {
+            other.anchors[person] = Book(configuration.People[person], own);
+        }
+
+        return other;
+    }
 
     /// <summary>Those of the configuration and of the tables alone.</summary>
     public AnchorBook StatedOf(Person person)

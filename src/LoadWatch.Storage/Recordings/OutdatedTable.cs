@@ -68,7 +68,8 @@ public sealed class OutdatedTable
     public void AddAsked() => session.Execute(MarkAsked, new { most = ArrivalTable.MostAttempts });
 
     /// <summary>Contents with a recording of a person that starts between the moments, the second one excluded.</summary>
-    public void AddRecordings(string person, Instant from, Instant to) =>
+    /// <returns>Number of those that were not among them.</returns>
+    public int AddRecordings(string person, Instant from, Instant to) =>
         session.Execute(MarkRecordings, new { person, from, to, most = ArrivalTable.MostAttempts });
 
     /// <summary>The next originals, sorted by person and content.</summary>

@@ -7,7 +7,11 @@ internal sealed class ImportRun(string folder, int files, int known)
 {
     private const int FloorRuns = 3;
 
-    private static readonly string[] Loadwatch = ["dotnet", Path.Combine(AppContext.BaseDirectory, "loadwatch.dll")];
+    /// <summary>What <c>LOADWATCH_PUBLISHED</c> names, which is compiled ahead as it is shipped, else what was built beside this.</summary>
+    private static readonly string[] Loadwatch = Environment.GetEnvironmentVariable("LOADWATCH_PUBLISHED") is { Length: > 0 } published
+        ? [Path.GetFullPath(published)]
+        : ["dotnet", Path.Combine(AppContext.BaseDirectory, "loadwatch.dll")];
+
     private static readonly string[] Self = ["dotnet", Path.Combine(AppContext.BaseDirectory, "Benchmarks.dll"), ImportBenchmark.Name, "--part"];
 
     public string Folder => folder;

@@ -67,6 +67,52 @@ public sealed class ObservedAnchorsTests : IDisposable
         Assert.Equal(folder.Export("days"), other.Export("days"));
     }
 
+    [Fact]
+    public void WhatOneImportTellsIsKnownBeforeItsSessionsAreComputed()
+    {
+        folder.Fill(Season());
+
+        Assert.Equal(0, folder.Sweep().Recomputed);
+        Assert.Equal([false, false, false, true], Rides().Select(HasPowerZones));
+    }
+
+    /// <summary>
+    /// Two groups of rides whose months lie all over the year, some with a copy that another watch cut short: what the first group tells is wrong by the second, and what a group of
+    /// three tells is never looked at ahead.
+    /// </summary>
+    [Fact]
+    public void AnImportOutOfOrderGivesWhatSmallOnesGive()
+    {
+        IReadOnlyList<(string Path, byte[] Bytes)> files = [.. Enumerable.Range(0, 80).SelectMany(Scattered)];
+        folder.Fill(files);
+        var asked = folder.Sweep().Recomputed;
+        using var other = new WorkingFolder();
+        foreach (var three in files.Chunk(3))
+        {
+            other.Fill(three);
+            other.Sweep();
+        }
+
+        Assert.True(asked > 0, "some were computed by what the second group changed");
+        Assert.True(Observed().Count >= 6, $"{Observed().Count} values");
+        Assert.Equal(Observed(other), Observed());
+        Assert.Equal(other.Export("activities"), folder.Export("activities"));
+        Assert.Equal(other.Export("days"), folder.Export("days"));
+        Assert.Equal(0, folder.Sweep().Recomputed);
+    }
+
+    /// <summary>A ride of one of twelve months, better and better by its number; names lead from one end of the year to the other and back.</summary>
+    private static IEnumerable<(string Path, byte[] Bytes)> Scattered(int number)
+    {
+        var date = new LocalDate(2025, 6, 3).PlusMonths(number * 5 % 12).PlusDays(number / 4);
+        int[] seconds = [120, 300, 720];
+        yield return ($"anna/{number:00}.fit", Ride(date, seconds[number % 3], number));
+        if (number % 8 == 0)
+        {
+            yield return ($"anna/{number:00} short.fit", Ride(date, seconds[number % 3], number, length: 1400));
+        }
+    }
+
     /// <summary>The ride of June is computed again when the last of the efforts of May comes late.</summary>
     [Fact]
     public void ALateFileChangesWhatComesBehindItsMonth()
@@ -126,14 +172,16 @@ public sealed class ObservedAnchorsTests : IDisposable
     ];
 
     /// <summary>25 minutes at 100 W, of which the first after 5 minutes as hard as can be for so long.</summary>
-    private static byte[] Ride(LocalDate date, int seconds)
+    /// <param name="more">Watts above that.</param>
+    /// <param name="length">Seconds in all.</param>
+    private static byte[] Ride(LocalDate date, int seconds, int more = 0, int length = 1500)
     {
         var ride = Some.Ride(date);
         return FitEncoder.Encode(ride with
         {
-            Samples = [.. Enumerable.Range(0, 1501).Select(second => new FitSample(
+            Samples = [.. Enumerable.Range(0, length + 1).Select(second => new FitSample(
                 ride.Start + Duration.FromSeconds(second),
-                Power: second >= 300 && second < 300 + seconds ? 250 + (18_000 / seconds) : 100,
+                Power: second >= 300 && second < 300 + seconds ? 250 + more + (18_000 / seconds) : 100,
                 Distance: 8.0 * second))],
         });
     }
