@@ -31,5 +31,5 @@ internal static class TestText
         }
     }
 
-    private static string Number(double? value, string unit) => value is { } known ? $"{known.ToString("0.###", CultureInfo.InvariantCulture)} {unit}" : $"unknown {unit}";
+    private static string Number(double? value, string unit) => value is { } known ? $"{known.ToString("0.###", CultureInfo.InvariantCulture)} {unit}" : "unknown";
 }

@@ -35,7 +35,7 @@ public sealed class SitToStandTests : IDisposable
     {
         Sweep("anna,,body_mass,70,kg,,\n", 16);
         Assert.EndsWith("above the published cut-off of 15 s.", Found().Text);
-        Assert.Contains("sit-to-stand power = unknown W, unknown W/kg: body height is not known", Explained());
+        Assert.Contains("sit-to-stand power = unknown, unknown: body height is not known", Explained());
 
         Sweep("anna,,body_mass,70,kg,,\nanna,,height,1.65,m,,\n", 16);
 
