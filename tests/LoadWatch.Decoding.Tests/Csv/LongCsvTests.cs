@@ -86,7 +86,7 @@ public class LongCsvTests
 
         Assert.Equal([(1, Start, 100), (2, Start + 9_000_000, 200)], content.Recordings().Select(Shape));
         Assert.Equal(
-            "line 2000002: the recording that begins at 2026-09-22T17:06:40Z is left out: 1999900 rows until here without a pause of 60 min are too many to be held",
+            "line 2000002: the recording that begins at 2026-09-22T18:00:00Z is left out: 1999900 rows until here without a pause of 60 min are too many to be held",
             Assert.Single(content.File.Problems).ToString());
     }
 
