@@ -112,17 +112,7 @@ internal sealed class SampleTimeline
         }
     }
 
-    private int FirstFrom(long time)
-    {
-        var (low, high) = (0, Times.Length);
-        while (low < high)
-        {
-            var middle = (low + high) / 2;
-            (low, high) = Times[middle] < time ? (middle + 1, high) : (low, middle);
-        }
-
-        return low;
-    }
+    private int FirstFrom(long time) => Sorted.FirstFrom<long, long>(Times, time, one => one);
 
     /// <summary>Undated is the smallest number there is, so it is in order nowhere but in front.</summary>
     private static bool IsInOrder(long[] times)

@@ -28,14 +28,14 @@ internal sealed class TrialEnvelopes
     public bool IsEmpty => sessions.Length == 0;
 
     /// <summary>Sessions of a stretch, both ends included, that show a best of any of the durations.</summary>
-    public int Count(LocalDate first, LocalDate last) => Begin(last.PlusDays(1)) - Begin(first);
+    public int Count(LocalDate first, LocalDate last) => FirstFrom(last.PlusDays(1)) - FirstFrom(first);
 
     /// <summary>From the shortest to the longest; of equal ones the earliest. Empty where no session lasted long enough.</summary>
     /// <param name="first">Null: from the first session on.</param>
     /// <param name="last">Null: up to the last session.</param>
     public IReadOnlyList<ChosenTrial> Of(LocalDate? first, LocalDate? last)
     {
-        var (begin, end) = (first is { } from ? Begin(from) : 0, last is { } to ? Begin(to.PlusDays(1)) : sessions.Length);
+        var (begin, end) = (first is { } from ? FirstFrom(from) : 0, last is { } to ? FirstFrom(to.PlusDays(1)) : sessions.Length);
         var envelope = new List<ChosenTrial>(TrialChoice.Durations.Count);
         for (var at = 0; at < TrialChoice.Durations.Count; at++)
         {
@@ -57,16 +57,5 @@ internal sealed class TrialEnvelopes
         return envelope;
     }
 
-    /// <summary>Index of the first session of a date or later.</summary>
-    private int Begin(LocalDate date)
-    {
-        var (low, high) = (0, dates.Length);
-        while (low < high)
-        {
-            var middle = (low + high) / 2;
-            (low, high) = dates[middle] < date ? (middle + 1, high) : (low, middle);
-        }
-
-        return low;
-    }
+    private int FirstFrom(LocalDate date) => Sorted.FirstFrom<LocalDate, LocalDate>(dates, date, one => one);
 }

@@ -1,3 +1,4 @@
+using System.Runtime.InteropServices;
 using LoadWatch.Activities;
 using LoadWatch.Days;
 using LoadWatch.Loads;
@@ -58,18 +59,7 @@ internal sealed class SessionSizes(RuleSubject subject)
         return sessions.GetRange(first, FirstFrom(until.PlusDays(1)) - first);
     }
 
-    /// <summary>Index of the first session on a date or later, by bisection.</summary>
-    private int FirstFrom(LocalDate date)
-    {
-        var (low, high) = (0, sessions.Count);
-        while (low < high)
-        {
-            var middle = (low + high) / 2;
-            (low, high) = sessions[middle].Date < date ? (middle + 1, high) : (low, middle);
-        }
-
-        return low;
-    }
+    private int FirstFrom(LocalDate date) => Sorted.FirstFrom(CollectionsMarshal.AsSpan(sessions), date, session => session.Date);
 
     private readonly record struct Size(LocalDate Date, double Value);
 }

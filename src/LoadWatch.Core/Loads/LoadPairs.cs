@@ -25,17 +25,7 @@ internal sealed class LoadPairs
         return pairs.AsSpan(first, end - first);
     }
 
-    private int FirstFrom(LocalDate date)
-    {
-        var (low, high) = (0, pairs.Length);
-        while (low < high)
-        {
-            var middle = (low + high) / 2;
-            (low, high) = pairs[middle].Date < date ? (middle + 1, high) : (low, middle);
-        }
-
-        return low;
-    }
+    private int FirstFrom(LocalDate date) => Sorted.FirstFrom<Pair, LocalDate>(pairs, date, pair => pair.Date);
 
     public readonly record struct Pair(LocalDate Date, double X, double Y);
 }

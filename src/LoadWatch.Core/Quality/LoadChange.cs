@@ -28,7 +28,7 @@ internal sealed class LoadChange(UsableChannel? power, UsableChannel? speed)
         var times = channel.UnixMilliseconds;
         var values = channel.Values;
         var (blocks, smallest, largest) = (0, double.PositiveInfinity, double.NegativeInfinity);
-        for (var row = FirstFrom(times, from); row < times.Length && times[row] < to;)
+        for (var row = Sorted.FirstFrom(times, from, time => time); row < times.Length && times[row] < to;)
         {
             var block = Moments.Between(from, times[row]) / BlockMilliseconds;
             var (sum, count) = (0.0, 0);
@@ -41,17 +41,5 @@ internal sealed class LoadChange(UsableChannel? power, UsableChannel? speed)
         }
 
         return blocks < 2 ? null : largest - smallest >= Math.Max(least, Fraction * largest);
-    }
-
-    private static int FirstFrom(ReadOnlySpan<long> times, long from)
-    {
-        var (low, high) = (0, times.Length);
-        while (low < high)
-        {
-            var middle = (low + high) / 2;
-            (low, high) = times[middle] < from ? (middle + 1, high) : (low, middle);
-        }
-
-        return low;
     }
 }
