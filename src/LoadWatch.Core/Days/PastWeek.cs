@@ -21,11 +21,16 @@ internal readonly record struct PastWeek(LocalDate UpTo, double? Load, bool IsSe
     /// <summary>Weeks one before the other, the newest first, as many as the series holds.</summary>
     /// <param name="last">Index of the last day of the newest week.</param>
     /// <param name="coveredOf7">Known days that a week must have.</param>
-    public static IEnumerable<PastWeek> Before(IReadOnlyList<Day> days, int last, int weeks, int coveredOf7)
+    public static IEnumerable<PastWeek> Before(IReadOnlyList<Day> days, int last, int weeks, int coveredOf7) =>
+        Ends(last, weeks).Select(index => EndingAt(days, index, coveredOf7));
+
+    /// <summary>Indices of the last days of weeks one before the other, the newest first, as many as the series holds.</summary>
+    /// <param name="last">Of the newest.</param>
+    public static IEnumerable<int> Ends(int last, int weeks)
     {
         for (var index = last; index >= 0 && index > last - (weeks * Length); index -= Length)
         {
-            yield return EndingAt(days, index, coveredOf7);
+            yield return index;
         }
     }
 

@@ -16,16 +16,11 @@ internal readonly record struct TrainingWeek(LocalDate UpTo, double? Load, int T
 {
     private const int Length = 7;
 
-    /// <summary>Weeks one before the other, the newest first, as many as the series holds whole.</summary>
+    /// <summary>Weeks one before the other, the newest first, as many as the series holds.</summary>
     /// <param name="last">Index of the last day of the newest week.</param>
     /// <param name="coveredOf7">Known days that a week must have.</param>
-    public static IEnumerable<TrainingWeek> Before(IReadOnlyList<Day> days, int last, int weeks, int coveredOf7)
-    {
-        for (var index = last; index >= 0 && index > last - (weeks * Length); index -= Length)
-        {
-            yield return EndingAt(days, index, coveredOf7);
-        }
-    }
+    public static IEnumerable<TrainingWeek> Before(IReadOnlyList<Day> days, int last, int weeks, int coveredOf7) =>
+        PastWeek.Ends(last, weeks).Select(index => EndingAt(days, index, coveredOf7));
 
     /// <summary>The week as one to compare with.</summary>
     public PastWeek Past => new(UpTo, Load, IsSetAside);

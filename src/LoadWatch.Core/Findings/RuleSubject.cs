@@ -40,7 +40,10 @@ public sealed record RuleSubject(Person Person, IReadOnlyList<Day> Days, RuleLim
     /// Best means of heart rate, power and speed by key of the activity, of the activities from two stretches of <see cref="FallingCapacityLimits.Days"/> before <see cref="From"/> on;
     /// empty where nothing is recorded on a date to judge.
     /// </summary>
-    public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> BestMeans { get; init; } = new Dictionary<string, IReadOnlyDictionary<Channel, BestMeans>>();
+    public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> BestMeans { get; init; } = NoBestMeans;
+
+    /// <summary>Of no session.</summary>
+    public static IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> NoBestMeans { get; } = new Dictionary<string, IReadOnlyDictionary<Channel, BestMeans>>();
 
     public PersonPlan Plan { get; init; } = PersonPlan.None;
 

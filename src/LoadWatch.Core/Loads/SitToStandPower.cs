@@ -17,6 +17,9 @@ public static class SitToStandPower
     private const double RisingShare = 0.5;
     private const double LegShare = 0.5;
 
+    /// <summary>Whether a test is one whose power this tells.</summary>
+    public static bool IsOf(TestRow test) => test.Test is FiveRises or RisesInThirtySeconds;
+
     /// <summary>Watts, above 0; null for another test, one not done as described, without the height of the seat, or a seat too high for the body.</summary>
     /// <param name="bodyMassKilograms">Above 0.</param>
     /// <param name="bodyHeightMetres">Above 0.</param>

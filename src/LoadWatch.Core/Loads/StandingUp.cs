@@ -18,7 +18,7 @@ public sealed record StandingUp(double? Watts, double? WattsPerKilogram, BodySiz
     /// <summary>Null for another test, and for one that was not done as described.</summary>
     public static StandingUp? Of(TestRow test, BodySize body)
     {
-        if (test is not { Test: SitToStandPower.FiveRises or SitToStandPower.RisesInThirtySeconds, Outcome: null, Value: not null })
+        if (!SitToStandPower.IsOf(test) || test is not { Outcome: null, Value: not null })
         {
             return null;
         }

@@ -16,7 +16,7 @@ namespace LoadWatch.Replays;
 public sealed record ReplayedPerson(Person Person, Group Group, IReadOnlyList<Day> Days, PersonPlan Plan, IReadOnlyList<DatedTest> Tests)
 {
     /// <summary>As <see cref="RuleSubject.BestMeans"/>, of all sessions.</summary>
-    public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> BestMeans { get; init; } = new Dictionary<string, IReadOnlyDictionary<Channel, BestMeans>>();
+    public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> BestMeans { get; init; } = RuleSubject.NoBestMeans;
 
     /// <summary>
     /// The findings of every day by some limits. Days are taken as they are stored: a changed reference value is not looked across, and a quantity that today's

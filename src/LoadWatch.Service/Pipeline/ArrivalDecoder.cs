@@ -79,27 +79,26 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
 
         var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings.Concat(file.Worn), now, configuration.Devices, configuration.People);
         var verdict = OfTheRoster(ArrivalVerdict.Of(file, owners, now));
-        var (kept, computed) = (new List<KeptRecording>(), new List<ComputedRecording>());
-        if (verdict.Person is { } owner && file.Table is null && OfOwner(content, read, configuration.People[owner], decided, kept, computed) is { } reason)
+        var taken = new Taken();
+        if (verdict.Person is { } owner && file.Table is null && OfOwner(content, read, configuration.People[owner], decided, taken) is { } reason)
         {
-            kept.Clear();
-            computed.Clear();
+            taken = new Taken();
             verdict = new ArrivalVerdict(ArrivalState.Held, reason, null);
         }
 
-        var arrival = new DecodedArrival(content.Sha, file.Kind, verdict, computed)
+        var arrival = new DecodedArrival(content.Sha, file.Kind, verdict, taken.Computed)
         {
             Through = read.Through,
             Problems = Problems(file),
             Table = verdict.State == ArrivalState.Stored ? file.Table : null,
             Questions = verdict.State == ArrivalState.Stored && file is { Table: not null, Worn.Count: 0 } ? RowsNotUsed(file.Problems) : [],
         };
-        return new JudgedArrival(arrival, kept);
+        return new JudgedArrival(arrival, taken.Kept);
     }
 
     /// <summary>Judges the recordings of one owner, one after the other.</summary>
     /// <returns>Why the file cannot be the owner's, by the first of its recordings that says so; else null.</returns>
-    private string? OfOwner(ArrivalContent content, ReadContents read, Person owner, bool decided, List<KeptRecording> kept, List<ComputedRecording> computed)
+    private string? OfOwner(ArrivalContent content, ReadContents read, Person owner, bool decided, Taken taken)
     {
         foreach (var recording in Usable(read))
         {
@@ -109,7 +108,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
                 return reason;
             }
 
-            Take(content.Sha, usable, owner, read, kept, computed);
+            Take(content.Sha, usable, owner, read, taken);
         }
 
         return null;
@@ -137,7 +136,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     private JudgedArrival OfSeveral(ArrivalContent content, ReadContents read, IReadOnlyList<string> subjects)
     {
         var file = read.File;
-        var (kept, computed) = (new List<KeptRecording>(), new List<ComputedRecording>());
+        var taken = new Taken();
         var questions = new List<string>();
         var dated = 0;
         foreach (var recording in Usable(read))
@@ -154,21 +153,21 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
             }
             else
             {
-                Take(content.Sha, usable, person, read, kept, computed);
+                Take(content.Sha, usable, person, read, taken);
             }
         }
 
         var asked = questions.Distinct(StringComparer.Ordinal).ToList();
-        var verdict = kept.Count + computed.Count > 0
+        var verdict = taken.Count > 0
             ? new ArrivalVerdict(ArrivalState.Stored, asked.Concat(file.Problems.Select(problem => problem.ToString())).FirstOrDefault(), null)
             : new ArrivalVerdict(ArrivalState.Held, dated == 0 ? "no recording with a date" : $"owner unknown: none of the {subjects.Count} people in it is in the roster", null);
-        var arrival = new DecodedArrival(content.Sha, file.Kind, verdict, computed)
+        var arrival = new DecodedArrival(content.Sha, file.Kind, verdict, taken.Computed)
         {
             Through = read.Through,
             Problems = Problems(file),
-            Questions = kept.Count + computed.Count > 0 ? asked : [],
+            Questions = taken.Count > 0 ? asked : [],
         };
-        return new JudgedArrival(arrival, kept);
+        return new JudgedArrival(arrival, taken.Kept);
     }
 
     private Person? OwnerOf(Recording recording) =>
@@ -239,15 +238,15 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     private UsableRecording Cut(Recording recording) => new(recording, configuration.Computation.UsableShareWanted, configuration.Computation.Quality);
 
     /// <summary>What is too long to be held is computed at once, and its samples let go.</summary>
-    private void Take(string sha, UsableRecording usable, Person owner, ReadContents read, List<KeptRecording> kept, List<ComputedRecording> computed)
+    private void Take(string sha, UsableRecording usable, Person owner, ReadContents read, Taken taken)
     {
         if (read.Through is null)
         {
-            kept.Add(Keep(sha, usable, owner, read.File.SourceName));
+            taken.Kept.Add(Keep(sha, usable, owner, read.File.SourceName));
         }
         else
         {
-            computed.Add(new ComputedRecording(RecordingSummaries.Of(sha, usable, owner, read.File.SourceName), null, Values(usable, owner, Basis)));
+            taken.Computed.Add(new ComputedRecording(RecordingSummaries.Of(sha, usable, owner, read.File.SourceName), null, Values(usable, owner, Basis)));
         }
     }
 
@@ -280,6 +279,16 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         var (whole, broken) => new ArrivalVerdict(
             ArrivalState.Refused, $"{broken} of the {whole + broken} files in it; the others are taken. The first: {content.Problems[0]}", null),
     };
+
+    /// <summary>Recordings of a content that have an owner: those to be computed, and those that are.</summary>
+    private sealed class Taken
+    {
+        public List<KeptRecording> Kept { get; } = [];
+
+        public List<ComputedRecording> Computed { get; } = [];
+
+        public int Count => Kept.Count + Computed.Count;
+    }
 
     /// <summary>A content as read.</summary>
     /// <param name="File">What it holds, without the samples where it is long.</param>

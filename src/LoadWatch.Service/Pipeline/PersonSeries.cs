@@ -57,7 +57,7 @@ public sealed record PersonSeries(IReadOnlyList<Day> Days, IReadOnlyList<Finding
             return new PersonSeries([], []);
         }
 
-        var stretch = new SeriesStretch(person, group, plan, changes) { BestMeans = bestMeans ?? SeriesStretch.NoBestMeans };
+        var stretch = new SeriesStretch(person, group, plan, changes) { BestMeans = bestMeans ?? RuleSubject.NoBestMeans };
         var (all, findings) = (before.ToList(), new List<Finding>());
         foreach (var next in (changes?.Periods.Cuts(from, to) ?? []).Append(to.PlusDays(1)))
         {

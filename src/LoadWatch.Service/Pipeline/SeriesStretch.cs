@@ -17,10 +17,8 @@ internal sealed class SeriesStretch(Person person, Group group, PersonPlan plan,
     private readonly HashSet<string> names =
         group.Limits.Quantities.Concat(group.LoadFallbacks).Append(group.LoadQuantity).Append(QuantityNames.FosterLoad).ToHashSet(StringComparer.Ordinal);
 
-    public static IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> NoBestMeans { get; } = new Dictionary<string, IReadOnlyDictionary<Channel, BestMeans>>();
-
     /// <summary>As <see cref="RuleSubject.BestMeans"/>.</summary>
-    public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> BestMeans { get; init; } = NoBestMeans;
+    public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> BestMeans { get; init; } = RuleSubject.NoBestMeans;
 
     /// <param name="stored">Days before, each by the values of its own date.</param>
     /// <param name="training">From the first date on.</param>

@@ -18,10 +18,8 @@ internal static class TestRows
         [
             .. session.TableRows.OfPerson(person.Id, RowKind.Tests, from, to).Select(row => new DatedTest(row.Date, (TestRow)row.Content)
             {
-                Body = IsOfRising((TestRow)row.Content) ? BodySize.On(anchors.Value, row.Date, person.Id) : BodySize.Unknown,
+                Body = SitToStandPower.IsOf((TestRow)row.Content) ? BodySize.On(anchors.Value, row.Date, person.Id) : BodySize.Unknown,
             }),
         ];
     }
-
-    private static bool IsOfRising(TestRow test) => test.Test is SitToStandPower.FiveRises or SitToStandPower.RisesInThirtySeconds;
 }

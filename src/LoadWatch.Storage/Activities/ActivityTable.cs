@@ -133,12 +133,7 @@ public sealed class ActivityTable
 
     /// <summary>Time by heart rate and by speed of a person's activities of the dates, both ends included, by key of the activity.</summary>
     public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, Histogram>> Histograms(string person, LocalDate from, LocalDate to) =>
-        session.Rows<ChannelRow>(SelectHistogramsOfPerson, new { person, from, to })
-            .GroupBy(row => row.Activity, StringComparer.Ordinal)
-            .ToDictionary(
-                rows => rows.Key,
-                IReadOnlyDictionary<Channel, Histogram> (rows) => rows.ToDictionary(row => Words<Channel>.Parse(row.Channel), row => HistogramCodec.Read(row.Bytes)),
-                StringComparer.Ordinal);
+        OfPerson(SelectHistogramsOfPerson, person, from, to, bytes => HistogramCodec.Read(bytes));
 
     /// <summary>How a person's activities were made whose winning recordings start in the range, both ends included, sorted by that start and by key.</summary>
     public IReadOnlyList<StoredMerge> Merges(string person, Instant from, Instant to) =>
@@ -171,12 +166,7 @@ public sealed class ActivityTable
 
     /// <summary>Best means of a person's activities of the dates, both ends included, by key of the activity.</summary>
     public IReadOnlyDictionary<string, IReadOnlyDictionary<Channel, BestMeans>> BestMeans(string person, LocalDate from, LocalDate to) =>
-        session.Rows<ChannelRow>(SelectBestMeansOfPerson, new { person, from, to })
-            .GroupBy(row => row.Activity, StringComparer.Ordinal)
-            .ToDictionary(
-                rows => rows.Key,
-                IReadOnlyDictionary<Channel, BestMeans> (rows) => rows.ToDictionary(row => Words<Channel>.Parse(row.Channel), row => BestMeansCodec.Read(row.Bytes)),
-                StringComparer.Ordinal);
+        OfPerson(SelectBestMeansOfPerson, person, from, to, bytes => BestMeansCodec.Read(bytes));
 
     /// <summary>The quantities of a person's activities of the dates, both ends included, where one's name begins with a prefix; sorted by date.</summary>
     public IReadOnlyList<(LocalDate Date, IReadOnlyList<Quantity> Quantities)> QuantitiesLike(string person, LocalDate from, LocalDate to, string prefix) =>
@@ -194,6 +184,14 @@ public sealed class ActivityTable
 
         public string Quantities { get; init; } = "";
     }
+
+    private Dictionary<string, IReadOnlyDictionary<Channel, T>> OfPerson<T>(string select, string person, LocalDate from, LocalDate to, Func<byte[], T> read) =>
+        session.Rows<ChannelRow>(select, new { person, from, to })
+            .GroupBy(row => row.Activity, StringComparer.Ordinal)
+            .ToDictionary(
+                rows => rows.Key,
+                IReadOnlyDictionary<Channel, T> (rows) => rows.ToDictionary(row => Words<Channel>.Parse(row.Channel), row => read(row.Bytes)),
+                StringComparer.Ordinal);
 
     private ILookup<string, ChannelRow> OfPage(string select, List<ActivityRow> rows) =>
         (rows.Count == 0 ? [] : session.Rows<ChannelRow>(select, new { first = rows[0].Key, last = rows[^1].Key })).ToLookup(row => row.Activity, StringComparer.Ordinal);
