@@ -5,8 +5,7 @@ using LoadWatch.Stimulus;
 namespace LoadWatch.Activities;
 
 /// <summary>
-/// What a session with table rows asked of each region. Logged sets are the whole work of their session, so they stand for the recording's regions, but
-/// for those that power or speed saw better; they are never added. Declared content speaks only where no channel could see hard work.
+/// What a session with table rows asked of each region. Logged sets stand for the recording's regions as <see cref="SetsAndChannels"/> says. Declared content speaks only where no channel could see hard work.
 /// </summary>
 internal static class JoinedStimulus
 {
@@ -31,17 +30,7 @@ internal static class JoinedStimulus
     }
 
     private static IReadOnlyList<RegionStimulus> Seen(
-        IReadOnlyList<RegionStimulus>? recorded, IReadOnlyList<RegionStimulus>? log, IReadOnlyList<BodyRegion>? regions)
-    {
-        if (log is null)
-        {
-            return recorded ?? [.. (regions ?? BodyRegions.All).Select(region => EnduranceEstimate.Nothing.For(region, [Unseen]))];
-        }
-
-        var ofChannels = (recorded ?? []).Where(region => region.Channel is StimulusChannels.Power or StimulusChannels.Speed);
-        return [.. log.Concat(ofChannels)
-            .GroupBy(region => region.Region)
-            .Select(region => region.OrderBy(one => one.Grade).First())
-            .OrderBy(region => region.Region)];
-    }
+        IReadOnlyList<RegionStimulus>? recorded, IReadOnlyList<RegionStimulus>? log, IReadOnlyList<BodyRegion>? regions) => log is null
+        ? recorded ?? [.. (regions ?? BodyRegions.All).Select(region => EnduranceEstimate.Nothing.For(region, [Unseen]))]
+        : SetsAndChannels.Best(log, recorded ?? []);
 }

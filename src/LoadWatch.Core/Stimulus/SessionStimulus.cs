@@ -6,8 +6,8 @@ using NodaTime;
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// The stimulus of one recording by body region. Working sets speak for themselves; otherwise the sport says which regions the endurance
-/// channels speak for. Moment by moment the best channel counts: power, on foot speed, and heart rate where they tell nothing. They are never added.
+/// The stimulus of one recording by body region. Working sets speak for themselves; the sport says which regions the endurance channels speak for. Of a region
+/// with both, the better graded counts. Moment by moment the best channel counts: power, on foot speed, and heart rate where they tell nothing. They are never added.
 /// </summary>
 /// <param name="Regions">Legs first; empty where the sport or the exercises name no region.</param>
 /// <param name="Remarks">In plain words.</param>
@@ -19,10 +19,15 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
     public static SessionStimulus Of(
         UsableRecording usable, LocalDate date, Person person, AnchorBook anchors, ComputationSettings settings)
     {
+        var channels = OfSport(usable, date, person, anchors, settings.Sports);
         var work = usable.Recording.Sets.Where(set => set.Active).ToList();
-        return work.Count > 0
-            ? SessionOfSets.Of(work, date, person, anchors, settings)
-            : OfSport(usable, date, person, anchors, settings.Sports);
+        if (work.Count == 0)
+        {
+            return channels;
+        }
+
+        var sets = SessionOfSets.Of(work, date, person, anchors, settings);
+        return sets with { Regions = SetsAndChannels.Best(sets.Regions, channels.Regions) };
     }
 
     /// <summary>Where speed is a body's own running or walking, and power a watch's model of it.</summary>

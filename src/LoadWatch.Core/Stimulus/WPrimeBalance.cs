@@ -57,7 +57,7 @@ public struct WPrimeBalance
             spent = (spent * Math.Exp(-recovering)) + ((intensity - critical) * standing);
             recovering = 0;
         }
-        else if (spent > 0)
+        else if (intensity < critical && spent > 0)
         {
             recovering += standing * Rate((critical - intensity) * wattsPerUnit);
         }

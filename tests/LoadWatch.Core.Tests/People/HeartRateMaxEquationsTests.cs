@@ -27,7 +27,7 @@ public class HeartRateMaxEquationsTests
     [InlineData(121)]
     public void AnImpossibleAgeGivesNothing(int age) => Assert.All(Enum.GetValues<HeartRateMaxEquation>(), equation => Assert.Null(equation.BpmAt(age, sex: null)));
 
-    /// <summary>Nothing that is read by age asks more of the older: maximum, bounds of zones, and the rate at which a share of the reserve is reached.</summary>
+    /// <summary>Of heart rate nothing that is read by age asks more of the older: maximum, bounds of zones, and the rate at which a share of the reserve is reached.</summary>
     [Fact]
     public void AnOlderPersonsLineIsNoHigherThanAYoungerOnes() =>
         Gen.Select(Gen.Enum<HeartRateMaxEquation>(), Gen.Int[1916, 2010], Gen.Int[1916, 2010], Sexes, Gen.Double[0, 1])

@@ -136,6 +136,29 @@ public class SessionStimulusTests
     }
 
     [Fact]
+    public void APlankInARidesFileHidesNoSprint()
+    {
+        var plank = Given.Set("plank", null, null) with { IsHold = true, DurationSeconds = 60, Hardness = 8 };
+        var ride = Given.Recording("cycling", Given.EverySecond((Channel.Power, Given.Steps((100, 60), (800, 6), (100, 60), (800, 6), (100, 60)))), plank);
+
+        var stimulus = Of(ride, Given.Cyclist);
+
+        Assert.Equal([(BodyRegion.Legs, "power", 2.0), (BodyRegion.Trunk, "sets", 1.0)], stimulus.Regions.Select(region => (region.Region, region.Channel, region.HardBouts!.Value.Mid)));
+    }
+
+    [Fact]
+    public void OfARegionWithSetsAndPowerTheBetterGradedCountsAndTheOtherIsTold()
+    {
+        var wallSit = Given.Set("wall_sit", null, null) with { IsHold = true, DurationSeconds = 40, Hardness = 8 };
+        var ride = Given.Recording("cycling", Given.EverySecond((Channel.Power, Given.Steps((100, 60), (800, 6), (100, 60)))), wallSit);
+
+        var legs = Assert.Single(Of(ride, Given.Cyclist).Regions);
+
+        Assert.Equal((Grade.A, "power", 1.0), (legs.Grade, legs.Channel, legs.HardBouts!.Value.Mid));
+        Assert.Contains("sets of the same session: not added, as its moments may be the same", legs.NotSeen);
+    }
+
+    [Fact]
     public void AnUnknownExerciseIsAskedForNotGuessed()
     {
         var stimulus = OfSets([], Given.Set("squat", 8, 80, 2), Given.Set("turkish_walk", 8, 80, 2), Given.Set(null, 8, 80, 2));

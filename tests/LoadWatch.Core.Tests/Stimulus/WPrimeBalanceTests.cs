@@ -19,6 +19,16 @@ public class WPrimeBalanceTests
     public void WithoutASecondBelowCriticalPowerNothingRecovers() =>
         Assert.Equal(20_000 - (60 * 100), Balances(Given.Samples((350, 60)), 250, 20_000)[60], 1e-9);
 
+    /// <summary>Nothing came back at critical power in the observations of Bartram et al. 2018 either, as `WPrimeRecoveryTests` quotes them.</summary>
+    [Fact]
+    public void AtCriticalPowerNothingIsSpentAndNothingRecovers()
+    {
+        var balances = Balances(Given.Samples((350, 60), (250, 600), (249, 1)), 250, 20_000);
+
+        Assert.Equal(14_000, balances[60], 1e-9);
+        Assert.Equal(14_000, balances[660], 1e-9);
+    }
+
     /// <summary>By hand: 10 s at 350 W spend 1000 J; 10 s at 150 W recover with 325.18 s, the stop of 590 s as rest does, with 267.22 s.</summary>
     [Fact]
     public void AStopRecoversAsRestDoesAndDoesNotSpend()
