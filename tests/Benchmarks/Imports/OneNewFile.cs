@@ -13,7 +13,7 @@ internal static class OneNewFile
     public const string Begin = "/one new file/begin";
     public const string End = "/one new file/end";
 
-    private const int WarmUp = 25;
+    private const int WarmUp = 100;
     private const int Measured = 15;
 
     /// <summary>Prints, for each measured morning, milliseconds of processor and rows read of both sweeps.</summary>
