@@ -8,7 +8,7 @@ namespace LoadWatch.Activities;
 /// </summary>
 public static class ChannelLimits
 {
-    /// <summary>No distance or height is larger, metres; a hostile one would overflow a sum.</summary>
+    /// <summary>No distance is larger, metres; a hostile one would overflow a sum.</summary>
     private const double Largest = 1e9;
 
     /// <summary>On foot nobody is faster, m/s; what is, is a jump of the position.</summary>
@@ -16,13 +16,15 @@ public static class ChannelLimits
 
     /// <summary>
     /// Heart rate 25 to 250 bpm (so 0, a lost contact, and 254, a code for none, are out); power 0 to 3000 W; speed 0 to 45 m/s, on foot and in team sports
-    /// to 13 m/s; every other channel up to 1e9, above or below 0.
+    /// to 13 m/s; height above -500 m, a zero in a FIT file, up to 12,000 m, beyond which a height below the sea lies that was written without the
+    /// zero point; every other channel up to 1e9, above or below 0.
     /// </summary>
     public static (double Least, double Most) Of(Channel channel, Sport sport) => channel switch
     {
         Channel.HeartRate => (25, 250),
         Channel.Power => (0, 3000),
         Channel.Speed => (0, sport.IsOnFoot || sport.IsTeamSport ? FastestOnFoot : 45),
+        Channel.Altitude => (-499, 12_000),
         _ => (-Largest, Largest),
     };
 

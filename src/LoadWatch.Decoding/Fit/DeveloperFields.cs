@@ -4,7 +4,7 @@ namespace LoadWatch.Decoding.Fit;
 
 /// <summary>
 /// The developer fields that a part describes. One that names a record field of the profile stands in for it where that is absent, in the units of
-/// its description; whether a description comes before or after the definition that uses it does not matter.
+/// its description; a unit that the channel is not known in feeds nothing. Whether a description comes before or after the definition that uses it does not matter.
 /// </summary>
 internal sealed class DeveloperFields
 {
@@ -47,8 +47,9 @@ internal sealed class DeveloperFields
 
         var scale = message.Int(FitFields.FieldDescription.Scale) is { } stated and > 1 ? stated : 1;
         var shift = message.Int(FitFields.FieldDescription.Offset) ?? 0;
-        var unit = MetricUnit(message.Text(FitFields.FieldDescription.Units));
-        return new Description(FitBaseTypes.FromByte(type), scale / unit, shift * unit, ChannelOf(message));
+        var channel = ChannelOf(message);
+        var unit = channel is { } known ? Unit(known, message.Text(FitFields.FieldDescription.Units)) : null;
+        return new Description(FitBaseTypes.FromByte(type), scale / (unit ?? 1), shift * (unit ?? 1), unit is null ? null : channel);
     }
 
     private static Channel? ChannelOf(in FitMessage message) =>
@@ -57,15 +58,28 @@ internal sealed class DeveloperFields
             ? ChannelSource.ChannelOf((byte)field)
             : null;
 
-    /// <summary>Metres or metres per second in one of the stated unit; 1 for every other unit.</summary>
-    private static double MetricUnit(string unit) => unit.Trim().ToUpperInvariant() switch
+    /// <summary>The unit of the channel in one of the stated unit; null for one that the channel is not known in. Without a word it is the channel's own.</summary>
+    private static double? Unit(Channel channel, string written) => (channel, written.Trim().ToUpperInvariant()) switch
     {
-        "KM/H" or "KPH" or "KMH" => 1 / 3.6,
-        "MPH" => 0.44704,
-        "KM" => 1000,
-        "MI" => 1609.344,
-        "FT" => 0.3048,
-        _ => 1,
+        (_, "") => 1,
+        (Channel.HeartRate, "BPM" or "1/MIN" or "BEATS/MIN") => 1,
+        (Channel.Power, "W" or "WATT" or "WATTS") => 1,
+        (Channel.Power, "KW") => 1000,
+        (Channel.Cadence, "RPM" or "1/MIN") => 1,
+        (Channel.Cadence, "SPM" or "STEPS/MIN") => 0.5,
+        (Channel.Speed, "M/S" or "MPS" or "M/SEC") => 1,
+        (Channel.Speed, "CM/S") => 0.01,
+        (Channel.Speed, "MM/S") => 0.001,
+        (Channel.Speed, "KM/H" or "KPH" or "KMH") => 1 / 3.6,
+        (Channel.Speed, "MPH" or "MI/H") => 0.44704,
+        (Channel.Distance or Channel.Altitude, "M" or "METER" or "METERS" or "METRE" or "METRES") => 1,
+        (Channel.Distance or Channel.Altitude, "MM") => 0.001,
+        (Channel.Distance or Channel.Altitude, "CM") => 0.01,
+        (Channel.Distance or Channel.Altitude, "KM") => 1000,
+        (Channel.Distance or Channel.Altitude, "MI") => 1609.344,
+        (Channel.Distance or Channel.Altitude, "YD") => 0.9144,
+        (Channel.Distance or Channel.Altitude, "FT") => 0.3048,
+        _ => null,
     };
 
     private readonly record struct Description(FitBaseType Type, double Scale, double Shift, Channel? Channel);

@@ -4,7 +4,7 @@ namespace LoadWatch.Decoding.Fit;
 
 /// <summary>
 /// Heart rates delivered in messages of their own. One message ties the strap's clock to a date (the anchor); the beats that follow carry the
-/// strap's time, in full or as its low 12 bits, in 1/1024 s. The strap's clock runs over at 32 bits.
+/// strap's time, in full or as its low 12 bits, in 1/1024 s. The strap's clock runs over at 32 bits. Slots that were not filled are passed over.
 /// </summary>
 internal sealed class LateBeats(MemoryBudget budget)
 {
@@ -20,11 +20,11 @@ internal sealed class LateBeats(MemoryBudget budget)
     public void Read(in FitMessage message)
     {
         var rates = message.Values(FitFields.HeartRate.BeatsPerMinute, 1);
-        var full = message.Values(FitFields.HeartRate.EventTime, 4);
-        if (message.Time(FitFields.Timestamp) is { } time && full.Length > 0)
-            Anchor(time + Fraction(message), FitNumber.UInt32(full, message.BigEndian));
+        var full = message.Values(FitFields.HeartRate.EventTime, sizeof(uint));
+        if (message.Time(FitFields.Timestamp) is { } time && message.UInt(FitFields.HeartRate.EventTime) is { } strapTime)
+            Anchor(time + Fraction(message), strapTime);
 
-        if (full.Length > 0)
+        if (message.UInt(FitFields.HeartRate.EventTime) is not null)
             ReadFull(full, rates, message.BigEndian);
         else
             ReadPacked(message.Values(FitFields.HeartRate.EventTime12, 1), rates);
@@ -39,10 +39,13 @@ internal sealed class LateBeats(MemoryBudget budget)
 
     private void ReadFull(ReadOnlySpan<byte> times, ReadOnlySpan<byte> rates, bool bigEndian)
     {
-        for (var i = 0; i < times.Length / 4; i++)
+        for (var i = 0; i < times.Length / sizeof(uint); i++)
         {
-            eventTime = FitNumber.UInt32(times[(i * 4)..], bigEndian);
-            Add(rates, i);
+            if (FitNumber.UInt32(times[(i * sizeof(uint))..], bigEndian) is var written and not uint.MaxValue)
+            {
+                eventTime = written;
+                Add(rates, i);
+            }
         }
     }
 
@@ -52,8 +55,11 @@ internal sealed class LateBeats(MemoryBudget budget)
         {
             var pair = BinaryPrimitives.ReadUInt16LittleEndian(bytes[(i * 3 / 2)..]);
             var low = (uint)(i % 2 == 0 ? pair & Mask : pair >> 4);
-            eventTime = unchecked(eventTime + ((low - eventTime) & Mask));
-            Add(rates, i);
+            if (low != Mask || rates[i] != byte.MaxValue)
+            {
+                eventTime = unchecked(eventTime + ((low - eventTime) & Mask));
+                Add(rates, i);
+            }
         }
     }
 

@@ -53,6 +53,9 @@ public class UsableSamplesTests
     [InlineData(Channel.Speed, 45, true)]
     [InlineData(Channel.Speed, 45.1, false)]
     [InlineData(Channel.Altitude, -400, true)]
+    [InlineData(Channel.Altitude, -500, false)] // A file's zero.
+    [InlineData(Channel.Altitude, 8849, true)]
+    [InlineData(Channel.Altitude, 12_606.6, false)] // 0.6 m below the sea, written without the zero point of 500 m.
     [InlineData(Channel.Altitude, double.PositiveInfinity, false)]
     [InlineData(Channel.Power, double.NaN, false)]
     public void LimitsCutWhatCannotBe(Channel channel, double value, bool usable) => Assert.Equal(usable, ChannelLimits.Usable(channel, value, Sport.Generic));

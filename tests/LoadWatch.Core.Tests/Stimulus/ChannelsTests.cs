@@ -143,18 +143,22 @@ public class ChannelsTests
         Assert.Equal(younger, Of(recording, Everything, null), (one, other) => one.MediumSeconds == other.MediumSeconds);
     }
 
-    /// <summary>The line that makes work count as hard is the same at any age: only the band around it is wider.</summary>
+    /// <summary>
+    /// The line that makes work count as hard is the same at any age: only the band around it is wider. Bouts may be fewer in the wider band, as two that are read longer
+    /// become one.
+    /// </summary>
     [Fact]
     public void AtAnyAgeTheMiddleOfAnyRideIsTheSameAndTheBandHoldsTheYoungersBand() =>
         Gen.Select(Gen.Double[0, 1200].Array[2, 200], Gen.Int[20, 59], Gen.Int[60, 95]).Sample((watts, young, old) =>
         {
             var recording = Given.Recording("cycling", Given.EverySecond((Channel.Power, watts)));
             var (younger, older) = (Of(recording, Everything, Given.Date.Year - young), Of(recording, Everything, Given.Date.Year - old));
-            return Bands(younger).Zip(Bands(older)).All(pair =>
-                pair.First.Mid == pair.Second.Mid && pair.Second.Low <= pair.First.Low + 1e-9 && pair.First.High <= pair.Second.High + 1e-9);
+            return younger.HardBouts!.Value.Mid == older.HardBouts!.Value.Mid
+                && Seconds(younger).Zip(Seconds(older)).All(pair =>
+                    pair.First.Mid == pair.Second.Mid && pair.Second.Low <= pair.First.Low + 1e-9 && pair.First.High <= pair.Second.High + 1e-9);
         });
 
-    private static Band[] Bands(RegionStimulus legs) => [legs.HardBouts!.Value, legs.SlowSeconds!.Value, legs.MediumSeconds!.Value, legs.LargeSeconds!.Value];
+    private static Band[] Seconds(RegionStimulus legs) => [legs.SlowSeconds!.Value, legs.MediumSeconds!.Value, legs.LargeSeconds!.Value];
 
     private static bool IsOrdered(EnduranceEstimate legs)
     {

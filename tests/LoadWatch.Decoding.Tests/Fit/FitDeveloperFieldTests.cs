@@ -49,6 +49,9 @@ public class FitDeveloperFieldTests
     [InlineData(1, "m/s", 5, 5.0)]
     [InlineData(10, "m/s", 53, 5.3)]
     [InlineData(255, "km/h", 18, 5.0)]
+    [InlineData(255, "cm/s", 500, 5.0)]
+    [InlineData(255, "mm/s", 5000, 5.0)]
+    [InlineData(255, "", 5, 5.0)]
     public void ScaleAndUnitAreApplied(int scale, string unit, double raw, double expected)
     {
         var samples = Described(Parts.Begin(), SpeedField, Unsigned16, scale, unit)
@@ -57,6 +60,24 @@ public class FitDeveloperFieldTests
             .Samples();
         Assert.Equal(expected, samples[Channel.Speed][0], 1e-9);
     }
+
+    [Theory]
+    [InlineData(SpeedField, "min/km")]
+    [InlineData(SpeedField, "bpm")]
+    [InlineData(PowerField, "kg")]
+    public void AUnitThatTheChannelIsNotKnownInIsNotGuessed(byte field, string unit) =>
+        Assert.Empty(Described(Parts.Begin(), field, Unsigned16, 255, unit)
+            .Define(0, new(RecordMessage, Time) { Developer = [new(0, Unsigned16, 0)] })
+            .Message(0, Parts.Base, 5)
+            .Samples()
+            .Channels);
+
+    [Fact]
+    public void StepsAreTwoToATurnOfTheLegs() =>
+        Assert.Equal([90], Described(Parts.Begin(), 4, Unsigned16, 255, "spm")
+            .Define(0, new(RecordMessage, Time) { Developer = [new(0, Unsigned16, 0)] })
+            .Message(0, Parts.Base, 180)
+            .Samples()[Channel.Cadence]);
 
     [Fact]
     public void FloatsAndBothByteOrdersAreRead()

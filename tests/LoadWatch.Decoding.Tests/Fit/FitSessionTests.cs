@@ -118,8 +118,24 @@ public class FitSessionTests
     public void TheStrapsClockMayRunOver()
     {
         var decoded = Parts.Begin().DefineRecord().Message(0, Parts.Base, 90)
-            .Define(5, Beats).Message(5, Parts.Base, 0, 4294967295, 70).Message(5, FitValue.None, FitValue.None, 1023, 71).Decode();
+            .Define(5, Beats).Message(5, Parts.Base, 0, 4294967294, 70).Message(5, FitValue.None, FitValue.None, 1023, 71).Decode();
         Assert.Equal([0, 1000], decoded.Recordings[0].LateHeartRates.Select(beat => beat.UnixMilliseconds - Parts.BaseUnixMilliseconds));
+    }
+
+    /// <summary>One layout for all messages: those that follow the anchor leave its full time open, and the slots that were not filled.</summary>
+    [Fact]
+    public void BeatsOfOneLayoutAreReadFromTheSlotsThatAreFilled()
+    {
+        var layout = new FitDefinition(132, new(253, Unsigned32), new(9, Unsigned32), new(6, Unsigned8, 4), new(10, Bytes, 6));
+        var decoded = Parts.Begin().DefineRecord().Message(0, Parts.Base, 90).Define(5, layout)
+            .Message(5, Parts.Base, 1024, FitValue.Many(70, null, null, null), FitValue.Many(null, null, null, null, null, null))
+            .Message(5, FitValue.None, FitValue.None, FitValue.Many(71, 72, null, null), FitValue.Many(0, 8, 192, null, null, null))
+            .Message(5, FitValue.None, FitValue.None, FitValue.Many(73, null, null, null), FitValue.Many(0, 240, 255, null, null, null))
+            .Decode();
+
+        Assert.Equal(
+            [(0, 70), (1000, 71), (2000, 72), (3000, 73)],
+            decoded.Recordings[0].LateHeartRates.Select(beat => ((int)(beat.UnixMilliseconds - Parts.BaseUnixMilliseconds), beat.BeatsPerMinute)));
     }
 
     [Fact]
