@@ -37,19 +37,22 @@ internal sealed class GeneratedPart
     private readonly Random random;
     private readonly GeneratedStyle style;
     private readonly bool? order;
+    private readonly bool hasFullTimes;
     private readonly FitPartWriter writer;
     private long now = 1_000_000_000;
 
-    private GeneratedPart(int number, GeneratedStyle style)
+    private GeneratedPart(int number, GeneratedStyle style, bool isEven)
     {
         random = new Random(number);
         this.style = style;
-        order = style == GeneratedStyle.Plain ? OneIn(2) : null;
+        hasFullTimes = isEven || style == GeneratedStyle.Plain;
+        order = hasFullTimes ? OneIn(2) : null;
         now += random.Next(100_000_000);
         writer = new FitPartWriter((FitHeaderStyle)random.Next(3));
     }
 
-    public static byte[] Make(int number, GeneratedStyle style) => new GeneratedPart(number, style).Write();
+    /// <param name="isEven">One byte order, and a full time in every record, whatever the style.</param>
+    public static byte[] Make(int number, GeneratedStyle style, bool isEven = false) => new GeneratedPart(number, style, isEven).Write();
 
     private byte[] Write()
     {
@@ -67,6 +70,9 @@ internal sealed class GeneratedPart
 
         if (!summaryFirst)
             Summaries();
+
+        if (style != GeneratedStyle.Plain && OneIn(3))
+            LateBeats();
 
         return writer.ToBytes();
     }
@@ -102,7 +108,7 @@ internal sealed class GeneratedPart
         if (style == GeneratedStyle.Plain)
             fields.RemoveAll(field => field.Number is 2 or 6);
 
-        var compressed = style != GeneratedStyle.Plain && local < 4 && OneIn(2);
+        var compressed = !hasFullTimes && local < 4 && OneIn(2);
         var developer = OneIn(2) ? new FitDeveloperLayout[] { new(0, Unsigned16, 0), new(1, Real32, 0), new(2, Unsigned8, 0), new(9, Unsigned8, 3, 0) } : [];
         writer.Define((local + 1) % 14, With(20, new FitFieldLayout(253, Unsigned32))).Message((local + 1) % 14, now);
         var time = compressed ? [] : new[] { new FitFieldLayout(253, Unsigned32) };
@@ -115,7 +121,7 @@ internal sealed class GeneratedPart
             if (compressed)
                 writer.Compressed(local, (int)(now & 31), values);
             else
-                writer.Message(local, [style != GeneratedStyle.Plain && OneIn(50) ? FitValue.None : now, .. values]);
+                writer.Message(local, [!hasFullTimes && OneIn(50) ? FitValue.None : now, .. values]);
 
             if (OneIn(10))
                 Stray();
@@ -154,6 +160,17 @@ internal sealed class GeneratedPart
 
         writer.Define(14, With(34, new(253, Unsigned32), new(1, Unsigned16), new(5, Unsigned32))).Message(14, now, 1, now + (900 * random.Next(-48, 56)));
     }
+
+    /// <summary>Beats of a strap: one that ties its clock to a date, then eight at a time.</summary>
+    private void LateBeats()
+    {
+        writer.Define(14, With(132, new(253, Unsigned32), new(0, Unsigned16), new(9, Unsigned32), new(6, Unsigned8))).Message(14, now, 0, random.Next(1_000_000), random.Next(40, 200));
+        writer.Define(14, With(132, new(6, Unsigned8, 8), new(10, Bytes, 12)));
+        for (var messages = random.Next(1, 4); messages > 0; messages--)
+            writer.Message(14, Many(8, 40, 200), Many(12, 0, 255));
+    }
+
+    private FitValue Many(int count, int least, int end) => FitValue.Many([.. Enumerable.Range(0, count).Select(_ => (double?)random.Next(least, end))]);
 
     private void Sets()
     {
