@@ -25,6 +25,9 @@ public sealed record JoinedActivity
     /// <summary>Sorted by name.</summary>
     public IReadOnlyList<Quantity> Quantities { get; init; } = [];
 
+    /// <summary>Layout of the table by name of the quantities that it states; what is computed is not in it.</summary>
+    public IReadOnlyDictionary<string, string> StatedBy { get; init; } = new Dictionary<string, string>();
+
     /// <summary>Legs first.</summary>
     public IReadOnlyList<RegionStimulus> Stimulus { get; init; } = [];
 

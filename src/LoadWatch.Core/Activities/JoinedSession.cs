@@ -29,6 +29,7 @@ internal static class JoinedSession
             Sport = sport,
             Sources = Sorted([.. recording?.Sources ?? [], .. stated.Select(one => one.Source)]),
             Quantities = quantities.Quantities,
+            StatedBy = quantities.StatedBy,
             Stimulus = regions,
             UsableShare = recording?.Values.UsableShare ?? new Dictionary<Channel, double>(),
             Remarks = [.. Remarks(recording, regions), .. log?.Sets!.Remarks ?? [], .. quantities.Remarks, .. NotCounted(session, log)],
@@ -68,7 +69,7 @@ internal static class JoinedSession
         fill.Add(log?.Sets!.Totals ?? [], log?.Layout ?? "");
         foreach (var one in stated)
         {
-            fill.Add(one.Quantities, one.Layout);
+            fill.AddStated(one.Quantities, one.Layout);
         }
 
         var (rating, minutes) = (fill[QuantityNames.Rating], fill[QuantityNames.Minutes]);

@@ -12,6 +12,7 @@ internal sealed class QuantityFill
     private const double Tenth = 0.1;
 
     private readonly SortedDictionary<string, (Quantity Quantity, string Teller)> taken = new(StringComparer.Ordinal);
+    private readonly Dictionary<string, string> statedBy = new(StringComparer.Ordinal);
     private readonly List<string> remarks = [];
 
     /// <summary>Sorted by name.</summary>
@@ -20,6 +21,23 @@ internal sealed class QuantityFill
     public IReadOnlyList<string> Remarks => remarks;
 
     public Quantity? this[string name] => taken.TryGetValue(name, out var found) ? found.Quantity : null;
+
+    /// <summary>Layout by name of those that a table states as they stand.</summary>
+    public IReadOnlyDictionary<string, string> StatedBy => statedBy;
+
+    /// <summary>As <see cref="Add"/>, of what a table states rather than what is computed.</summary>
+    public void AddStated(IEnumerable<Quantity> quantities, string layout)
+    {
+        foreach (var quantity in quantities)
+        {
+            if (!taken.ContainsKey(quantity.Name))
+            {
+                statedBy.Add(quantity.Name, layout);
+            }
+
+            Add([quantity], layout);
+        }
+    }
 
     public void Add(IEnumerable<Quantity> quantities, string teller)
     {

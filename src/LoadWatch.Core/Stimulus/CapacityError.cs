@@ -22,4 +22,9 @@ public static class CapacityError
         AnchorSource.Observed => Estimated,
         _ => Population,
     };
+
+    /// <summary>Of a one-repetition maximum: measured on the very machine 2 %, everything else 10 %.</summary>
+    /// <param name="isOfMachine">False where the maximum of the exercise alone stands in for that of a machine.</param>
+    public static double OfOneRepetitionMax(AnchorSource source, bool isOfMachine = true) =>
+        isOfMachine && source == AnchorSource.Measured ? Measured : Estimated;
 }

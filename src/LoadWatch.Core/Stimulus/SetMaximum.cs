@@ -29,6 +29,6 @@ internal sealed record SetMaximum(double Kilograms, bool IsOfMachine, bool IsFre
             anchor.Value,
             ofMachine,
             measured && anchor.Date >= date.PlusDays(-FreshDays),
-            measured ? CapacityError.Measured : CapacityError.Estimated);
+            CapacityError.OfOneRepetitionMax(anchor.Source, ofMachine));
     }
 }

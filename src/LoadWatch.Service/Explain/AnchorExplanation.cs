@@ -41,12 +41,13 @@ public static class AnchorExplanation
 
     private static void AppendHolding(StringBuilder text, Person person, AnchorBook book, AnchorKind kind, List<Anchor> all, LocalDate on)
     {
+        var readings = Readings(person, book, kind, all, on);
         foreach (var same in all.GroupBy(anchor => (anchor.Sport, anchor.Exercise, anchor.Machine)).OrderBy(same => $"{same.Key}", StringComparer.Ordinal))
         {
             var held = Held(book, same.First(), on);
-            foreach (var anchor in same.OrderByDescending(anchor => anchor == held).ThenByDescending(anchor => anchor.Date))
+            foreach (var anchor in same.OrderByDescending(anchor => readings.Exists(reading => reading.Maximum == anchor)).ThenByDescending(anchor => anchor == held).ThenByDescending(anchor => anchor.Date))
             {
-                var use = anchor == held ? "holds" : anchor.Date > on ? "not yet" : "not used";
+                var use = anchor.Date > on ? "not yet" : Use(anchor, held, readings);
                 text.AppendLine(CultureInfo.InvariantCulture, $"    {use}: {AnchorText.Of(anchor.Source == AnchorSource.Observed ? anchor with { Note = null } : anchor)}{(AnchorText.Error(anchor) is { } error ? $"; taken to be within {error}" : "")}");
             }
         }
@@ -58,6 +59,31 @@ public static class AnchorExplanation
 
         var byAge = kind == AnchorKind.HeartRateMax && on > LocalDate.MinIsoValue ? AnchorText.ByAge(person, on, book.HeartRateMaxEquation) : null;
         text.AppendLine(CultureInfo.InvariantCulture, $"    {(byAge is null ? "none holds" : $"none is stated; holds: {byAge}")}");
+    }
+
+    /// <summary>Those of every sport that the person has a value for; nothing of a kind that holds whatever its age.</summary>
+    private static List<MaximumReading> Readings(Person person, AnchorBook book, AnchorKind kind, List<Anchor> all, LocalDate on) => kind switch
+    {
+        AnchorKind.PowerMax =>
+        [
+            .. book.Of(person.Id)
+                .Where(anchor => anchor.Kind is AnchorKind.PowerMax or AnchorKind.CriticalPower)
+                .Select(anchor => anchor.Sport ?? "cycling").Distinct(StringComparer.Ordinal)
+                .Select(sport => MaximumReading.OfPower(book, on, person.Id, Recordings.Sport.Parse(sport))),
+        ],
+        AnchorKind.SpeedMax when all.Count > 0 => [MaximumReading.OfSpeed(book, on, person.Id)],
+        _ => [],
+    };
+
+    private static string Use(Anchor anchor, Anchor? held, List<MaximumReading> readings)
+    {
+        if (readings.Count == 0 || readings.Exists(reading => reading.Maximum == anchor))
+        {
+            return readings.Count > 0 || anchor == held ? "holds" : "not used";
+        }
+
+        var why = $"not read for the stimulus ({string.Join("; ", readings.Select(reading => reading.WhyNot(anchor)).Distinct(StringComparer.Ordinal))})";
+        return anchor == held && anchor.Kind == AnchorKind.SpeedMax ? $"holds for shares of the best speed, {why}" : why;
     }
 
     private static Anchor? Held(AnchorBook book, Anchor one, LocalDate on) => one.Sport is { } sport
@@ -89,6 +115,8 @@ public static class AnchorExplanation
         AnchorKind.DPrime => "stimulus by speed on foot: what is left above critical speed",
         AnchorKind.SpeedMax => "stimulus by speed on foot: hard bouts and the largest class; shares of the best speed",
         AnchorKind.OneRepetitionMax => "stimulus by sets",
+        AnchorKind.BodyMass => "minutes of moderate and vigorous effort on a bicycle by power; sit-to-stand power in W",
+        AnchorKind.Height => "sit-to-stand power",
         _ => "nothing that is computed of sessions",
     };
 }

@@ -37,10 +37,16 @@ internal static class AnchorText
     public static string? Error(Anchor anchor) => anchor.Kind switch
     {
         AnchorKind.WPrime or AnchorKind.DPrime => $"{Percent(CapacityError.WPrime)} (an assumption, whoever measured it)",
-        AnchorKind.CriticalPower or AnchorKind.PowerMax or AnchorKind.CriticalSpeed or AnchorKind.SpeedMax or AnchorKind.OneRepetitionMax =>
+        AnchorKind.CriticalPower or AnchorKind.PowerMax or AnchorKind.CriticalSpeed or AnchorKind.SpeedMax =>
             $"{Percent(CapacityError.Of(anchor.Source))} (an assumption for {Words.Of(anchor.Source)} values)",
+        AnchorKind.OneRepetitionMax => $"{Percent(CapacityError.OfOneRepetitionMax(anchor.Source))} (an assumption for {Words.Of(anchor.Source)} values){Borrowed(anchor)}",
         _ => null,
     };
+
+    /// <summary>A measured maximum of no machine is less sure on one.</summary>
+    private static string Borrowed(Anchor anchor) => anchor is { Source: AnchorSource.Measured, Machine: null }
+        ? $", {Percent(CapacityError.OfOneRepetitionMax(anchor.Source, isOfMachine: false))} of a set on a machine"
+        : "";
 
     private static string Percent(double share) => (share * 100).ToString("0.#", CultureInfo.InvariantCulture) + " %";
 

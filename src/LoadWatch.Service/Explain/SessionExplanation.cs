@@ -109,25 +109,44 @@ public sealed class SessionExplanation
         }
     }
 
-    /// <summary>Those that bear on a session of its channels and its sport.</summary>
+    /// <summary>Those that are read of a session of its channels and its sport.</summary>
     private List<Anchor> AnchorsOf(JoinedActivity activity)
     {
         var book = basis.AnchorsOf(person);
-        var onFoot = ReadsSpeed(activity.Sport);
         IEnumerable<AnchorKind> kinds =
         [
             .. activity.UsableShare.ContainsKey(Channel.HeartRate)
                 ? [AnchorKind.HeartRateRest, AnchorKind.HeartRateMax, AnchorKind.HeartRateVt1, AnchorKind.HeartRateVt2, AnchorKind.TrimpWeight, AnchorKind.TrimpExponent]
                 : Array.Empty<AnchorKind>(),
-            .. onFoot && activity.UsableShare.ContainsKey(Channel.Speed) ? [AnchorKind.CriticalSpeed, AnchorKind.DPrime, AnchorKind.SpeedMax] : Array.Empty<AnchorKind>(),
+            .. activity.Sport.Family == "cycling" && activity.UsableShare.ContainsKey(Channel.Power) ? [AnchorKind.BodyMass] : Array.Empty<AnchorKind>(),
         ];
-        var ofPower = !onFoot && activity.UsableShare.ContainsKey(Channel.Power) ? new[] { AnchorKind.CriticalPower, AnchorKind.WPrime, AnchorKind.PowerMax } : [];
         return
         [
             .. kinds.Select(kind => book.On(activity.Date, person.Id, kind)).OfType<Anchor>(),
-            .. ofPower.Select(kind => book.On(activity.Date, person.Id, kind, activity.Sport)).OfType<Anchor>(),
+            .. MaximaOf(activity)?.Read ?? [],
             .. activity[QuantityNames.Sets] is null ? [] : Maxima(book, activity.Date),
         ];
+    }
+
+    /// <summary>As the stimulus reads them; null of a session without the channel.</summary>
+    private MaximumReading? MaximaOf(JoinedActivity activity)
+    {
+        var book = basis.AnchorsOf(person);
+        return ReadsSpeed(activity.Sport)
+            ? activity.UsableShare.ContainsKey(Channel.Speed) ? MaximumReading.OfSpeed(book, activity.Date, person.Id) : null
+            : activity.UsableShare.ContainsKey(Channel.Power) ? MaximumReading.OfPower(book, activity.Date, person.Id, activity.Sport) : null;
+    }
+
+    /// <summary>The maximal power or speed that holds but that the stimulus does not read, with the reason.</summary>
+    private string? NotRead(JoinedActivity activity)
+    {
+        var book = basis.AnchorsOf(person);
+        var held = ReadsSpeed(activity.Sport)
+            ? book.On(activity.Date, person.Id, AnchorKind.SpeedMax)
+            : book.On(activity.Date, person.Id, AnchorKind.PowerMax, activity.Sport);
+        return held is not null && MaximaOf(activity)?.WhyNot(held) is { } why
+            ? $"not read for the stimulus ({why}): {AnchorText.Of(held)}{(held.Kind == AnchorKind.SpeedMax ? "; read for shares of the best speed" : "")}"
+            : null;
     }
 
     private static bool ReadsSpeed(Sport sport) => sport.IsOnFoot || sport.IsTeamSport;
@@ -143,6 +162,11 @@ public sealed class SessionExplanation
         foreach (var anchor in anchors)
         {
             Line(AnchorText.Of(anchor));
+        }
+
+        if (NotRead(activity) is { } notRead)
+        {
+            Line(notRead);
         }
 
         var byAge = activity.UsableShare.ContainsKey(Channel.HeartRate) && !anchors.Exists(anchor => anchor.Kind == AnchorKind.HeartRateMax)
@@ -168,8 +192,9 @@ public sealed class SessionExplanation
         foreach (var quantity in activity.Quantities)
         {
             Line(QuantityText.Of(quantity));
-            var formula = QuantityFormula.Of(quantity.Name, equations);
-            Below(formula is null ? "as a table states it" : $"formula  {formula.Formula}");
+            var giver = activity.StatedBy.GetValueOrDefault(quantity.Name);
+            var formula = giver is null ? QuantityFormula.Of(quantity.Name, equations) : null;
+            Below(giver is not null ? $"as the table {OneLine.Of(giver)} states it" : formula is null ? "as a table states it" : $"formula  {formula.Formula}");
             if (formula is not null)
             {
                 Below($"source   {formula.Source}");
@@ -183,7 +208,7 @@ public sealed class SessionExplanation
     }
 
     private static IEnumerable<string> Steps(string quantity, JoinedActivity activity, HeartRateSteps? steps) =>
-        quantity == QuantityNames.FosterLoad && activity[QuantityNames.Rating] is { } rating && activity[QuantityNames.Minutes] is { } minutes
+        quantity == QuantityNames.FosterLoad && !activity.StatedBy.ContainsKey(quantity) && activity[QuantityNames.Rating] is { } rating && activity[QuantityNames.Minutes] is { } minutes
             ? [string.Create(CultureInfo.InvariantCulture, $"{rating:0.##} x {minutes:0.##} min")]
             : steps?.Of(quantity) ?? [];
 
@@ -259,7 +284,7 @@ public sealed class SessionExplanation
             Line($"grade {grade}: {StimulusFormula.Of(grade)}");
         }
 
-        foreach (var assumption in activity.Stimulus.Select(region => region.Channel).Distinct(StringComparer.Ordinal).SelectMany(StimulusFormula.Assumptions).Distinct(StringComparer.Ordinal))
+        foreach (var assumption in activity.Stimulus.Select(region => region.Channel).Distinct(StringComparer.Ordinal).SelectMany(channel => StimulusFormula.Assumptions(channel, person.AgeOn(activity.Date))).Distinct(StringComparer.Ordinal))
         {
             Line($"assumed: {assumption}");
         }

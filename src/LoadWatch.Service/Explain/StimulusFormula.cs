@@ -1,3 +1,4 @@
+using System.Globalization;
 using LoadWatch.Stimulus;
 
 namespace LoadWatch.Service.Explain;
@@ -31,10 +32,18 @@ internal sealed record StimulusFormula(string Formula, string Source)
     };
 
     /// <summary>What no measurement stands behind; nothing where nothing was read.</summary>
-    public static IEnumerable<string> Assumptions(string channel) => channel is StimulusChannels.None or StimulusChannels.Declared
+    /// <param name="age">Full years on the date, or null where unknown.</param>
+    public static IEnumerable<string> Assumptions(string channel, int? age) => channel is StimulusChannels.None or StimulusChannels.Declared
         ? []
         :
         [
-            "the low and high ends of each band are the same session read with large units joining late and early (recruitment range 70 and 30, usually 50; class shares 10 points and critical drive 0.05 either way)",
+            $"the low and high ends of each band are the same session read with large units joining late and early (recruitment range 70 and 30, usually 50; {Spans(age)} either way)",
         ];
+
+    private static string Spans(int? age)
+    {
+        var older = Variants.Of(age) == Variants.Older;
+        var critical = (Variants.Of(age).High.CriticalDrive - Variant.Mid.CriticalDrive).ToString("0.###", CultureInfo.InvariantCulture);
+        return $"class shares {(older ? 15 : 10)} points and critical drive {critical}{(older ? $" from {Variants.OlderFrom} years on" : "")}";
+    }
 }

@@ -35,6 +35,16 @@ public class ActivityJoinTests
         Assert.Empty(result.Questions);
     }
 
+    /// <summary>The minutes are of the recording, the load is computed: neither is the table's.</summary>
+    [Fact]
+    public void OnlyWhatATableStatesIsTheTables()
+    {
+        var activity = Assert.Single(Join([Morning], Session(rating: 7, minutes: 60, quantities: new Loads.Quantity("distance", 9000, "m", Estimated: false))).Activities);
+
+        Assert.Equal([("distance", "ratings"), ("rating", "ratings")], activity.StatedBy.OrderBy(one => one.Key, StringComparer.Ordinal).Select(one => (one.Key, one.Value)));
+        Assert.Equal(420, activity["foster_load"]);
+    }
+
     [Fact]
     public void ARatingWithNumberTwoJoinsTheEveningRun()
     {

@@ -55,9 +55,39 @@ public sealed class ExplainAnchorTests : IDisposable
 
         var told = Explained("bo", "power_max", Some.Yesterday);
 
-        Assert.Contains("holds: power_max cycling = 400 W, observed, holds from 2026-06-01, last shown on 2026-05-30; taken to be within 10 % (an assumption for observed values)", told, StringComparison.Ordinal);
+        Assert.Contains("not read for the stimulus (below 2.5 times critical_power, so it is not from a sprint): power_max cycling = 400 W, observed, holds from 2026-06-01, last shown on 2026-05-30; taken to be within 10 % (an assumption for observed values)", told, StringComparison.Ordinal);
         Assert.Contains("from own sessions of the 12 months before 2026-06-01: 400 W within 20 W, last shown on 2026-05-30: highest mean power of 1 s in the 6 months before", told, StringComparison.Ordinal);
     }
+
+    /// <summary>Measured two years ago against seen last month: the estimator reads the second, 183 days being the bound.</summary>
+    [Fact]
+    public void AMaximumTooOldForTheStimulusDoesNotHold()
+    {
+        folder.Write("anchors.csv", Tested + "bo,2024-06-01,power_max,1000,W,,\nbo,2026-05-01,power_max,900,W,observed,\n");
+
+        var told = Explained("bo", "power_max", Some.Yesterday);
+
+        Assert.Contains("    holds: power_max = 900 W, observed", told, StringComparison.Ordinal);
+        Assert.Contains("    not read for the stimulus (older than 183 days): power_max = 1000 W, measured", told, StringComparison.Ordinal);
+    }
+
+    /// <summary>What <c>SetMaximum</c> takes: 2 % measured on the machine, else 10 %.</summary>
+    [Fact]
+    public void AOneRepetitionMaximumTellsTheErrorThatSetsAreReadWith()
+    {
+        folder.Write("anchors.csv", Tested + "bo,2026-05-01,one_repetition_max,100,kg,estimated,squat\nbo,2026-05-01,one_repetition_max,80,kg,,bench_press\n");
+
+        var told = Explained("bo", "one_repetition_max", Some.Yesterday);
+
+        Assert.Contains("100 kg, estimated, holds from 2026-05-01; taken to be within 10 % (an assumption for estimated values)", told, StringComparison.Ordinal);
+        Assert.Contains("within 2 % (an assumption for measured values), 10 % of a set on a machine", told, StringComparison.Ordinal);
+    }
+
+    [Theory]
+    [InlineData("body_mass", "minutes of moderate and vigorous effort on a bicycle by power; sit-to-stand power in W")]
+    [InlineData("height", "sit-to-stand power")]
+    public void MassAndHeightSayWhatRestsOnThem(string kind, string rests) =>
+        Assert.Contains($"rests on it: {rests}", Explained("bo", kind, Some.Yesterday), StringComparison.Ordinal);
 
     [Fact]
     public void NobodyAndNothingIsExplainedOfUnknownWords()

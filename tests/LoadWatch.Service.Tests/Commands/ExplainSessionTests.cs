@@ -49,11 +49,40 @@ public sealed class ExplainSessionTests : IDisposable
 
         var told = AtNoon("bo");
 
-        Assert.Contains("measured, or stated as such: heart rate, power, distance, heart_rate_rest, heart_rate_max, critical_power, w_prime, power_max", told, StringComparison.Ordinal);
+        Assert.Contains("measured, or stated as such: heart rate, power, distance, heart_rate_rest, heart_rate_max, critical_power, w_prime\n", told.ReplaceLineEndings("\n"), StringComparison.Ordinal);
         Assert.Contains("assumed: critical_power is within 2 % (an assumption for measured values)", told, StringComparison.Ordinal);
         Assert.Contains("assumed: w_prime is within 30 % (an assumption, whoever measured it)", told, StringComparison.Ordinal);
         Assert.Contains("critical_power = 250 W, measured, undated, holds from the beginning", Between(told, "  reference values", "  quantities"), StringComparison.Ordinal);
         Assert.Contains("bouts and the largest class: no power_max dated within 183 days before", told[told.IndexOf("  not seen", StringComparison.Ordinal)..], StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void AMaximumThatIsNotReadStandsApartWithTheReason()
+    {
+        Ride("bo", Some.Yesterday, second => 120, second => 200);
+
+        Assert.Contains("not read for the stimulus (undated): power_max = 1100 W, measured", Between(AtNoon("bo"), "  reference values", "  quantities"), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void BodyMassBearsOnARideWithPower()
+    {
+        folder.Write("anchors.csv", $"{WorkingFolder.Anchors.TrimEnd()}\nbo,2026-05-01,body_mass,75,kg,,\n");
+        Ride("bo", Some.Yesterday, second => 120, second => 200);
+
+        Assert.Contains("body_mass = 75 kg, measured", Between(AtNoon("bo"), "  reference values", "  quantities"), StringComparison.Ordinal);
+    }
+
+    /// <summary>The spans that the estimator reads, at 59 and from 60 full years on.</summary>
+    [Theory]
+    [InlineData(1967, "class shares 10 points and critical drive 0.05 either way")]
+    [InlineData(1966, "class shares 15 points and critical drive 0.075 from 60 years on either way")]
+    public void TheAssumedBandIsThatOfTheAge(int birthYear, string told)
+    {
+        folder.Write("roster.csv", WorkingFolder.Roster.Replace("1991", $"{birthYear}", StringComparison.Ordinal));
+        Ride("bo", Some.Yesterday, second => 120, second => 200);
+
+        Assert.Contains(told, AtNoon("bo"), StringComparison.Ordinal);
     }
 
     /// <summary>By hand: 208 - 0.7 x 68 years = 160.4 bpm.</summary>
