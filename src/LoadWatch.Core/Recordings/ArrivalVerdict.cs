@@ -23,7 +23,7 @@ public sealed record ArrivalVerdict(ArrivalState State, string? Reason, string? 
             return new ArrivalVerdict(ArrivalState.Held, $"date implausible: a log of {strange.Start:uuuu-MM-dd}", null);
         }
 
-        if (file.Table is { } table)
+        if (file is { Table: { } table, Recordings.Count: 0 })
         {
             return OfTable(file, table, claims);
         }

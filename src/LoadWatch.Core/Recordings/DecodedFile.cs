@@ -13,7 +13,7 @@ public sealed record DecodedFile(
     IReadOnlyList<Recording> Recordings,
     IReadOnlyList<Problem> Problems)
 {
-    /// <summary>Rows of a table where the content is one; then there are no recordings. Null for everything else.</summary>
+    /// <summary>Rows of a table where the content is one; only where a device wrote it are there recordings beside it. Null for everything else.</summary>
     public DecodedTable? Table { get; init; }
 
     /// <summary>

@@ -61,7 +61,7 @@ public sealed class FitDecoder
 
         Settle();
         var decoded = new DecodedFile("fit", FileType(), SourceName: null, recordings, problems);
-        return recordings.Count > 0 || worn.Count == 0 ? decoded : decoded with { Table = WornDays.Table(wornDates), Worn = worn };
+        return worn.Count == 0 ? decoded : decoded with { Table = WornDays.Table(wornDates), Worn = worn };
     }
 
     private void ReadParts()
@@ -141,12 +141,13 @@ public sealed class FitDecoder
             TakeMonitoring(content);
     }
 
-    /// <summary>The log of a day: its walks and runs, else that the watch was worn without any.</summary>
+    /// <summary>The log of a day or more: its walks and runs, and the dates on which the watch was worn without any (I-6).</summary>
     private void TakeMonitoring(PartContent content)
     {
         Settle();
-        recordings.AddRange(MonitoredBouts.Of(content, recordings.Count + 1));
-        var dates = WornDays.Of(content);
+        var bouts = MonitoredBouts.Of(content, recordings.Count + 1).ToList();
+        recordings.AddRange(bouts);
+        var dates = WornDays.Of(content, bouts);
         wornDates.AddRange(dates);
         worn.AddRange(WornDays.Witnesses(content, dates));
     }

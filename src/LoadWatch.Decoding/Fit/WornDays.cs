@@ -6,7 +6,7 @@ using NodaTime.Text;
 namespace LoadWatch.Decoding.Fit;
 
 /// <summary>
-/// Dates on which a watch was worn and wrote no walk and no run: a day of rest, unless another recording tells of training. A date counts when something was
+/// Dates on which a watch was worn and no walk and no run began: a day of rest, unless another recording tells of training. A date counts when something was
 /// written in half of its hours (a choice), by the local time that the watch states; without one nothing is said.
 /// </summary>
 internal static class WornDays
@@ -15,13 +15,15 @@ internal static class WornDays
     private const int LeastHours = 12;
     private const int MinutesPerHour = 60;
 
-    public static IReadOnlyList<LocalDate> Of(PartContent content) => content.LocalOffsetSeconds is not { } offset ? [] :
+    /// <param name="bouts">The walks and runs of the same log.</param>
+    public static IReadOnlyList<LocalDate> Of(PartContent content, IEnumerable<Recording> bouts) => content.LocalOffsetSeconds is not { } offset ? [] :
     [
         .. content.Monitoring.Minutes.Keys
             .Select(minute => Local(content, minute, offset))
             .GroupBy(time => time.Date)
             .Where(date => date.Select(time => time.Hour).Distinct().Count() >= LeastHours)
-            .Select(date => date.Key),
+            .Select(date => date.Key)
+            .Except(bouts.Select(bout => bout.Start).OfType<Instant>().Select(start => start.WithOffset(Offset.FromSeconds(offset)).Date)),
     ];
 
     public static DecodedTable Table(IEnumerable<LocalDate> dates) => new(

@@ -182,7 +182,7 @@ public static class InspectCommand
 
     private static IEnumerable<InspectLine> Of(string path, DecodedFile file) => file.Recordings.Count == 0
         ? [InspectLine.WithoutRecording(path, file.Kind, file.Problems) with { Table = TableText(file.Table) }]
-        : file.Recordings.Select(recording => InspectLine.Of(path, file, recording)).ToList();
+        : file.Recordings.Select((recording, i) => InspectLine.Of(path, file, recording) with { Table = i == 0 ? TableText(file.Table) : null }).ToList();
 
     /// <summary><c>table of sets by layout gym: 120 rows of 12 people, 2026-03-01 to 2026-03-31</c>.</summary>
     private static string? TableText(DecodedTable? table)
@@ -216,6 +216,11 @@ public static class InspectCommand
         output.Write(line.Part is { } part
             ? FormattableString.Invariant($"{OneLine.Of(line.File)}  part {part}  {OneLine.Of(line.Sport ?? "")}  {line.FirstSample ?? "no date"}  {line.Samples} samples\n")
             : $"{OneLine.Of(line.File)}  {line.Table ?? $"{line.Kind}: no recording"}\n");
+        if (line is { Part: not null, Table: { } beside })
+        {
+            output.Write($"    beside it a {beside}\n");
+        }
+
         foreach (var (channel, numbers) in line.Channels)
         {
             output.Write(FormattableString.Invariant($"    {channel,-10} {numbers.N,7} readings, mean {numbers.Mean:0.##}, highest {numbers.Max:0.##}\n"));

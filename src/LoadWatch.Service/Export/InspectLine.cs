@@ -28,7 +28,7 @@ public sealed record InspectLine(
     DeviceLine? Device,
     IReadOnlyList<ProblemLine> Problems)
 {
-    /// <summary>What a table holds, in words, for people; null for everything else.</summary>
+    /// <summary>What a table holds, in words, for people, on the first line of a file; null for everything else.</summary>
     [JsonIgnore]
     public string? Table { get; init; }
 

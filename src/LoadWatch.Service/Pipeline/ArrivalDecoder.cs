@@ -80,7 +80,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
         var owners = claims.Count > 0 ? claims : Attribution.ByDevice(file.Recordings.Concat(file.Worn), now, configuration.Devices, configuration.People);
         var verdict = OfTheRoster(ArrivalVerdict.Of(file, owners, now));
         var taken = new Taken();
-        if (verdict.Person is { } owner && file.Table is null && OfOwner(content, read, configuration.People[owner], decided, taken) is { } reason)
+        if (verdict.Person is { } owner && OfOwner(content, read, configuration.People[owner], decided, taken) is { } reason)
         {
             taken = new Taken();
             verdict = new ArrivalVerdict(ArrivalState.Held, reason, null);
@@ -208,7 +208,7 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     /// <summary>What a stored table holds.</summary>
     /// <exception cref="InvalidDataException">The archive does not hold it any more, or it is no table as layouts are now.</exception>
     public DecodedTable ReadTable(Arrival arrival) =>
-        ReadContent(Read(arrival, "")).File.Table ?? throw new InvalidDataException($"{arrival.Sha[..12]} is no table");
+        ReadContent(Read(arrival, ""), Salvages(arrival.Sha)).File.Table ?? throw new InvalidDataException($"{arrival.Sha[..12]} is no table");
 
     /// <summary>The recordings of a stored arrival, read back from the archive; none where its original is missing or damaged.</summary>
     public RecordingsAtHand ReadRecordings(Arrival arrival)

@@ -153,6 +153,28 @@ public class FitMonitoringTests
         Assert.Null(decoded.Table);
     }
 
+    [Fact]
+    public void AWornDateBesideOneWithAWalkIsRestOfItsOwn()
+    {
+        var part = Day();
+        Walk(part, 5, 20, 100, Walking);
+        WearUntil(part, hours: 40);
+        var decoded = part.Decode();
+        Assert.Equal(new LocalDate(2021, 9, 8), Assert.Single(decoded.Recordings).Start!.Value.WithOffset(Offset.FromHours(2)).Date);
+        Assert.Equal([new LocalDate(2021, 9, 9)], decoded.Table!.Rows.Select(row => row.Date));
+        Assert.Equal(new Device(255, 7, 42), Assert.Single(decoded.Worn).Device);
+    }
+
+    [Fact]
+    public void AWalkThatBeganBeforeMidnightLeavesTheNextDateRest()
+    {
+        const int TenBefore = (20 * 60) - 10;
+        var part = Day().Message(0, Start + (60 * TenBefore), Start + (60 * TenBefore) + 7200);
+        Walk(part, TenBefore, 20, 100, Walking);
+        WearUntil(part, hours: 40);
+        Assert.Equal([new LocalDate(2021, 9, 9)], part.Decode().Table!.Rows.Select(row => row.Date));
+    }
+
     private static FitPartWriter Day() => Parts.Begin(MonitoringFile)
         .Define(0, Info).Message(0, Start, Start + 7200)
         .Define(1, Steps).Define(2, HeartRates);
@@ -164,6 +186,14 @@ public class FitMonitoringTests
             part.Message(2, Short((60 * hour) + 30), 60);
 
         return part;
+    }
+
+    /// <summary>Heart rates of every hour at full times.</summary>
+    private static void WearUntil(FitPartWriter part, int hours)
+    {
+        part.Define(4, new(55, new(253, Unsigned32), new(27, Unsigned8)));
+        for (var hour = 1; hour < hours; hour++)
+            part.Message(4, Start + (3600 * hour) + 1800, 60);
     }
 
     /// <summary>Writes the counter at the end of each minute; the answer is where it stands.</summary>

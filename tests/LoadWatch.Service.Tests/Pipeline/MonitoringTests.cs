@@ -43,10 +43,21 @@ public sealed class MonitoringTests : IDisposable
         Assert.Equal(DayState.Recorded, States()[0]);
     }
 
+    [Fact]
+    public void ALogOfAWalkAndOfAWornDayTellsOfBoth()
+    {
+        folder.Put("anna/ride.fit", Some.Fit(Some.Yesterday.PlusDays(-3)));
+        folder.Put("anna/days.fit", Log(Some.Yesterday.PlusDays(-2), walkedMinutes: 30, wornDaysBehind: 1));
+        folder.Sweep();
+        Assert.Equal([DayState.Recorded, DayState.Recorded, DayState.Rest, DayState.Unknown], States());
+        folder.Rebuild();
+        Assert.Equal([DayState.Recorded, DayState.Recorded, DayState.Rest, DayState.Unknown], States());
+    }
+
     private List<DayState> States() => [.. folder.Read((_, session) => session.Days.OfPerson("anna")).Select(day => day.State)];
 
-    /// <summary>Heart rate every half hour from six in the morning until ten at night, and a walk at noon.</summary>
-    private static byte[] Log(LocalDate date, int walkedMinutes)
+    /// <summary>Heart rate every half hour from six in the morning until ten at night, and a walk at noon of the first day.</summary>
+    private static byte[] Log(LocalDate date, int walkedMinutes, int wornDaysBehind = 0)
     {
         var midnight = (int)(date.AtMidnight().InUtc().ToInstant() - Epoch).TotalSeconds;
         var writer = new FitPartWriter()
@@ -59,6 +70,9 @@ public sealed class MonitoringTests : IDisposable
 
         for (var minute = 0; minute <= walkedMinutes; minute++)
             writer.Message(3, midnight + (12 * 3600) + (60 * minute), Walking, 100 * minute);
+
+        for (var halfHour = 48; halfHour < 48 * (1 + wornDaysBehind); halfHour++)
+            writer.Message(2, midnight + (1800 * halfHour), 62);
 
         return writer.ToBytes();
     }
