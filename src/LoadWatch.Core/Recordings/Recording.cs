@@ -55,6 +55,9 @@ public sealed record Recording
     /// <summary>Pool lengths.</summary>
     public int Lengths { get; init; }
 
+    /// <summary>What is stated a second time by another app and does not count.</summary>
+    public Shadowed Shadowed { get; init; } = Shadowed.None;
+
     public Device Device { get; init; } = Device.Unknown;
 
     /// <summary>What its file lacks behind it, in plain words: it was cut off there, and what lies before was used. Null where the file is whole.</summary>

@@ -3,8 +3,8 @@ using LoadWatch.Recordings;
 namespace LoadWatch.Decoding.Fit;
 
 /// <summary>
-/// The developer fields that a part describes. One that names a record field of the profile stands in for it where that is absent, in the units of
-/// its description; a unit that the channel is not known in feeds nothing. Whether a description comes before or after the definition that uses it does not matter.
+/// The developer fields that a part describes. One that names a field of the profile stands in for it where that is absent, in the units of
+/// its description; a unit that the value is not known in feeds nothing. Whether a description comes before or after the definition that uses it does not matter.
 /// </summary>
 internal sealed class DeveloperFields
 {
@@ -38,6 +38,21 @@ internal sealed class DeveloperFields
         return slot.Count > 0 ? new ChannelSource(channel, slot, described.Scale, described.Shift) : null;
     }
 
+    /// <summary>What a developer field of a session states for one of its totals, in seconds or metres; null where none does.</summary>
+    /// <param name="field">The field of the profile that it stands for.</param>
+    public double? Total(in FitMessage message, byte field)
+    {
+        foreach (var slot in message.DeveloperSlots)
+        {
+            if (descriptions.TryGetValue(Key(slot.DeveloperIndex, slot.Number), out var described) && described.Total == field
+                && message.Number(slot, described.Type) is { } raw
+                && (raw / described.Scale) - described.Shift is var value and >= 0)
+                return value;
+        }
+
+        return null;
+    }
+
     private static int Key(int developer, int number) => ((developer & 0xFF) << 8) | (number & 0xFF);
 
     private static Description? Read(in FitMessage message)
@@ -47,15 +62,26 @@ internal sealed class DeveloperFields
 
         var scale = message.Int(FitFields.FieldDescription.Scale) is { } stated and > 1 ? stated : 1;
         var shift = message.Int(FitFields.FieldDescription.Offset) ?? 0;
-        var channel = ChannelOf(message);
-        var unit = channel is { } known ? Unit(known, message.Text(FitFields.FieldDescription.Units)) : null;
-        return new Description(FitBaseTypes.FromByte(type), scale / (unit ?? 1), shift * (unit ?? 1), unit is null ? null : channel);
+        var (channel, total, written) = (ChannelOf(message), TotalOf(message), message.Text(FitFields.FieldDescription.Units));
+        var unit = channel is { } known ? Unit(known, written)
+            : total is FitFields.Session.DistanceCentimetres ? Unit(Channel.Distance, written)
+            : total is not null ? Seconds(written)
+            : null;
+        return new Description(FitBaseTypes.FromByte(type), scale / (unit ?? 1), shift * (unit ?? 1), unit is null ? null : channel, unit is null ? null : total);
     }
 
     private static Channel? ChannelOf(in FitMessage message) =>
-        message.Int(FitFields.FieldDescription.NativeMessage) == FitMessages.Record
-        && message.Int(FitFields.FieldDescription.NativeField) is { } field and < byte.MaxValue
-            ? ChannelSource.ChannelOf((byte)field)
+        NativeField(message, FitMessages.Record) is { } field ? ChannelSource.ChannelOf(field) : null;
+
+    private static byte? TotalOf(in FitMessage message) => NativeField(message, FitMessages.Session) switch
+    {
+        { } field when field is FitFields.Session.ElapsedMilliseconds or FitFields.Session.TimerMilliseconds or FitFields.Session.DistanceCentimetres => field,
+        _ => null,
+    };
+
+    private static byte? NativeField(in FitMessage message, int ofMessage) =>
+        message.Int(FitFields.FieldDescription.NativeMessage) == ofMessage && message.Int(FitFields.FieldDescription.NativeField) is { } field and < byte.MaxValue
+            ? (byte)field
             : null;
 
     /// <summary>The unit of the channel in one of the stated unit; null for one that the channel is not known in. Without a word it is the channel's own.</summary>
@@ -82,5 +108,17 @@ internal sealed class DeveloperFields
         _ => null,
     };
 
-    private readonly record struct Description(FitBaseType Type, double Scale, double Shift, Channel? Channel);
+    /// <summary>Seconds of one in the stated unit; null for a unit that is not known. Without a word it is seconds.</summary>
+    private static double? Seconds(string written) => written.Trim().ToUpperInvariant() switch
+    {
+        "" or "S" or "SEC" or "SECS" or "SECOND" or "SECONDS" => 1,
+        "MS" or "MSEC" => 0.001,
+        "MIN" or "MINUTE" or "MINUTES" => 60,
+        "H" or "HOUR" or "HOURS" => 3600,
+        _ => null,
+    };
+
+    /// <param name="Channel">What it feeds in a record.</param>
+    /// <param name="Total">The field of a session that it stands for.</param>
+    private readonly record struct Description(FitBaseType Type, double Scale, double Shift, Channel? Channel, byte? Total);
 }

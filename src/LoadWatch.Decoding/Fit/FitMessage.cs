@@ -9,6 +9,8 @@ internal readonly ref struct FitMessage(MessagePlan plan, ReadOnlySpan<byte> pay
 
     public bool BigEndian => plan.BigEndian;
 
+    public ReadOnlySpan<DeveloperSlot> DeveloperSlots => plan.DeveloperSlots;
+
     /// <summary>The first valid value.</summary>
     public double? Number(byte field)
     {
@@ -18,6 +20,16 @@ internal readonly ref struct FitMessage(MessagePlan plan, ReadOnlySpan<byte> pay
 
         var value = FitNumber.FirstValid(Bytes(slot), slot.Type, plan.BigEndian);
         return double.IsNaN(value) ? null : value;
+    }
+
+    /// <summary>The same with the profile's scale, which whole numbers alone have: a real number is written as it is.</summary>
+    public double? Scaled(byte field, double scale) => Slot(field).Type.IsFloat() ? Number(field) : Number(field) / scale;
+
+    /// <summary>The first valid value of a developer field, whose type is in its description.</summary>
+    public double? Number(DeveloperSlot field, FitBaseType type)
+    {
+        var slot = new FieldSlot(field.Number, type, field.Offset, field.Size);
+        return slot.Count > 0 && FitNumber.FirstValid(Bytes(slot), type, plan.BigEndian) is var value && !double.IsNaN(value) ? value : null;
     }
 
     public int? Int(byte field) => Number(field) is { } value && value >= int.MinValue && value <= int.MaxValue ? (int)value : null;

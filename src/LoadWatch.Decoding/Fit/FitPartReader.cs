@@ -19,7 +19,7 @@ internal sealed class FitPartReader
     public FitPartReader(MemoryBudget budget)
     {
         this.budget = budget;
-        Content = new PartContent(budget);
+        Content = new PartContent(budget, developer);
     }
 
     public PartContent Content { get; }

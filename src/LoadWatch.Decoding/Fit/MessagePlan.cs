@@ -22,7 +22,7 @@ internal sealed class MessagePlan
     /// <summary>Record messages: what feeds the channels, the wide field before the narrow one.</summary>
     public ChannelSource[] Native { get; init; } = [];
 
-    /// <summary>Record messages: developer fields that hold bytes.</summary>
+    /// <summary>Record and session messages: developer fields that hold bytes.</summary>
     public DeveloperSlot[] DeveloperSlots { get; init; } = [];
 
     /// <summary>Record messages: developer fields that stand for a field of the profile, as described when last bound.</summary>

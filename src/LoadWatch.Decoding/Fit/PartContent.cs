@@ -3,7 +3,7 @@ using LoadWatch.Recordings;
 namespace LoadWatch.Decoding.Fit;
 
 /// <summary>What one part says, times still as in the file: milliseconds of the FIT epoch or of the device's uptime.</summary>
-internal sealed class PartContent(MemoryBudget budget)
+internal sealed class PartContent(MemoryBudget budget, DeveloperFields developer)
 {
     private const int SessionCost = 1200;
     private const int SetCost = 256;
@@ -146,15 +146,33 @@ internal sealed class PartContent(MemoryBudget budget)
             Device.Serial ?? message.UInt(FitFields.DeviceInfo.Serial));
     }
 
-    private void ReadSession(in FitMessage message) => Keep(
-        Sessions,
-        new SessionFacts(
-            message.Time(FitFields.Session.Start),
-            SportOf(message, FitFields.Session.Sport, FitFields.Session.SubSport),
-            message.Number(FitFields.Session.ElapsedMilliseconds) / 1000,
-            message.Number(FitFields.Session.TimerMilliseconds) / 1000,
-            message.Number(FitFields.Session.DistanceCentimetres) / 100),
-        SessionCost);
+    /// <summary>A total of a developer field stands in for the profile's where that is absent, else it is shown.</summary>
+    private void ReadSession(in FitMessage message)
+    {
+        var elapsed = message.Scaled(FitFields.Session.ElapsedMilliseconds, 1000);
+        var timer = message.Scaled(FitFields.Session.TimerMilliseconds, 1000);
+        var distance = message.Scaled(FitFields.Session.DistanceCentimetres, 100);
+        var shadowed = Shadowed.None;
+        if (message.DeveloperSlots.Length > 0)
+        {
+            var beside = new Shadowed
+            {
+                ElapsedSeconds = developer.Total(message, FitFields.Session.ElapsedMilliseconds),
+                TimerSeconds = developer.Total(message, FitFields.Session.TimerMilliseconds),
+                DistanceMetres = developer.Total(message, FitFields.Session.DistanceCentimetres),
+            };
+            shadowed = new Shadowed
+            {
+                ElapsedSeconds = elapsed is null ? null : beside.ElapsedSeconds,
+                TimerSeconds = timer is null ? null : beside.TimerSeconds,
+                DistanceMetres = distance is null ? null : beside.DistanceMetres,
+            };
+            (elapsed, timer, distance) = (elapsed ?? beside.ElapsedSeconds, timer ?? beside.TimerSeconds, distance ?? beside.DistanceMetres);
+        }
+
+        var sport = SportOf(message, FitFields.Session.Sport, FitFields.Session.SubSport);
+        Keep(Sessions, new SessionFacts(message.Time(FitFields.Session.Start), sport, elapsed, timer, distance) { Shadowed = shadowed }, SessionCost);
+    }
 
     private void ReadSet(in FitMessage message)
     {
@@ -162,11 +180,11 @@ internal sealed class PartContent(MemoryBudget budget)
         var category = message.Int(FitFields.Set.Category);
         var set = new StrengthSet(
             Start: null,
-            message.Number(FitFields.Set.DurationMilliseconds) / 1000,
+            message.Scaled(FitFields.Set.DurationMilliseconds, 1000),
             Active: message.Int(FitFields.Set.Type) != 0,
             category is { } number and not FitDecoder.UnknownExercise ? FitWords.ExerciseCategories[number] : null,
             message.Int(FitFields.Set.Repetitions),
-            message.Number(FitFields.Set.WeightSixteenths) / 16);
+            message.Scaled(FitFields.Set.WeightSixteenths, 16));
         Keep(Sets, (start, set), SetCost);
     }
 
@@ -195,4 +213,8 @@ internal sealed class PartContent(MemoryBudget budget)
 }
 
 /// <summary>What a session message states; null where it does not.</summary>
-internal sealed record SessionFacts(long? Start, Sport Sport, double? ElapsedSeconds, double? TimerSeconds, double? DistanceMetres);
+internal sealed record SessionFacts(long? Start, Sport Sport, double? ElapsedSeconds, double? TimerSeconds, double? DistanceMetres)
+{
+    /// <summary>Totals that developer fields state beside it.</summary>
+    public Shadowed Shadowed { get; init; } = Shadowed.None;
+}

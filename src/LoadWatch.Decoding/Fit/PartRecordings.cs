@@ -26,6 +26,7 @@ internal sealed class PartRecordings
     private List<Recording> Build(int firstPart)
     {
         var samples = SampleSplit.Of(content.Samples, content.Clock, owners);
+        var shadowed = SampleSplit.Shadowed(content.Samples, content.Clock, owners);
         var sets = Shared(content.Sets, set => set.Start);
         var laps = Shared(content.Laps, lap => lap);
         var lengths = Shared(content.Lengths, length => length);
@@ -41,8 +42,12 @@ internal sealed class PartRecordings
             Pauses = Pauses(pauses[i], samples[i]),
             LateHeartRates = InTimeOrder(beats[i]),
             BeatIntervals = intervals[i],
+            Shadowed = shadowed is null ? session.Shadowed : session.Shadowed with { Channels = Statistics(shadowed[i]) },
         })];
     }
+
+    private static Dictionary<Channel, ChannelStatistics> Statistics(SampleSeries samples) =>
+        samples.Channels.ToDictionary(channel => channel, channel => ChannelStatistics.Of(samples, channel));
 
     private Recording Basics(SessionFacts session, SampleSeries samples) => new()
     {

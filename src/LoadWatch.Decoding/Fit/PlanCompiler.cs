@@ -29,7 +29,7 @@ internal static class PlanCompiler
             IsPassedOver = !FitMessages.IsRead(message),
             Fields = FitMessages.IsRead(message) && !isRecord ? Array.FindAll(fields, field => field.Size > 0) : [],
             Native = native,
-            DeveloperSlots = isRecord ? developer : [],
+            DeveloperSlots = message is FitMessages.Record or FitMessages.Session ? developer : [],
             PackedOffset = packed,
             IsColumnar = isRecord && timestamp.Size == 4 && packed < 0 && developer.Length == 0
                 && native.DistinctBy(source => source.Channel).Count() == native.Length,

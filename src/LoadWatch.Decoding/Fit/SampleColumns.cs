@@ -8,14 +8,15 @@ internal sealed class SampleColumns
     private static readonly int ChannelCount = Enum.GetValues<Channel>().Length;
     private readonly SparseColumn<long> times;
     private readonly SparseColumn<double>[] channels;
+    private readonly MemoryBudget budget;
+    private SparseColumn<double>[]? shadowed;
     private PackedSpeedDistance packed;
 
     public SampleColumns(MemoryBudget budget)
     {
+        this.budget = budget;
         times = new(SampleSeries.Undated, sizeof(long), budget);
-        channels = new SparseColumn<double>[ChannelCount];
-        for (var i = 0; i < channels.Length; i++)
-            channels[i] = new(double.NaN, sizeof(double), budget);
+        channels = Empty();
     }
 
     public int Count { get; private set; }
@@ -24,6 +25,9 @@ internal sealed class SampleColumns
     public SparseColumn<long> Times => times;
 
     public SparseColumn<double> this[Channel channel] => channels[(int)channel];
+
+    /// <summary>What developer fields hold where a channel of the row is filled already; null where they never do.</summary>
+    public SparseColumn<double>? Shadowed(Channel channel) => shadowed?[(int)channel] is { IsEmpty: false } column ? column : null;
 
     /// <summary>Adds a row. A channel takes the first of its sources that holds a value.</summary>
     public void Add(MessagePlan plan, ReadOnlySpan<byte> payload, long time)
@@ -38,7 +42,7 @@ internal sealed class SampleColumns
             filled = Unpack(payload.Slice(plan.PackedOffset, PackedSpeedDistance.Size), row, filled);
 
         if (plan.Developer.Length > 0)
-            Fill(plan.Developer, plan, payload, row, filled);
+            FillByDeveloper(plan, payload, row, filled);
     }
 
     /// <summary>Adds the rows of a run, each channel of which has one source.</summary>
@@ -62,7 +66,17 @@ internal sealed class SampleColumns
     {
         times.Return();
         Array.ForEach(channels, channel => channel.Return());
+        Array.ForEach(shadowed ?? [], channel => channel.Return());
         Count = 0;
+    }
+
+    private SparseColumn<double>[] Empty()
+    {
+        var columns = new SparseColumn<double>[ChannelCount];
+        for (var i = 0; i < columns.Length; i++)
+            columns[i] = new(double.NaN, sizeof(double), budget);
+
+        return columns;
     }
 
     private int Fill(ChannelSource[] sources, MessagePlan plan, ReadOnlySpan<byte> payload, int row, int filled)
@@ -74,6 +88,21 @@ internal sealed class SampleColumns
         }
 
         return filled;
+    }
+
+    private void FillByDeveloper(MessagePlan plan, ReadOnlySpan<byte> payload, int row, int filled)
+    {
+        foreach (ref readonly var source in plan.Developer.AsSpan())
+        {
+            var value = source.Read(payload, plan.BigEndian);
+            if (!double.IsFinite(value))
+                continue;
+
+            if (Filled(filled, source.Channel))
+                (shadowed ??= Empty())[(int)source.Channel].Set(row, value);
+            else
+                filled |= Set(source.Channel, row, value);
+        }
     }
 
     private int Unpack(ReadOnlySpan<byte> bytes, int row, int filled)

@@ -17,19 +17,27 @@ internal sealed class SampleSplit
     }
 
     /// <summary>One series per session, in the order of the sessions.</summary>
-    public static SampleSeries[] Of(SampleColumns samples, FitClock clock, SessionOwners owners)
+    public static SampleSeries[] Of(SampleColumns samples, FitClock clock, SessionOwners owners) =>
+        new SampleSplit(samples, owners).Series(samples.Times, channel => samples[channel] is { IsEmpty: false } column ? column : null, clock);
+
+    /// <summary>The same for what developer fields hold beside them; null where they hold nothing.</summary>
+    public static SampleSeries[]? Shadowed(SampleColumns samples, FitClock clock, SessionOwners owners) =>
+        Array.Exists(Enum.GetValues<Channel>(), channel => samples.Shadowed(channel) is not null)
+            ? new SampleSplit(samples, owners).Series(samples.Times, samples.Shadowed, clock)
+            : null;
+
+    private SampleSeries[] Series(SparseColumn<long> rows, Func<Channel, SparseColumn<double>?> columnOf, FitClock clock)
     {
-        var split = new SampleSplit(samples, owners);
-        var times = split.Columns(samples.Times);
+        var times = Columns(rows);
         Array.ForEach(times, clock.ToUnix);
         var channels = new Dictionary<Channel, double[][]>();
         foreach (var channel in Enum.GetValues<Channel>())
         {
-            if (samples[channel] is { IsEmpty: false } column)
-                channels[channel] = split.Columns(column);
+            if (columnOf(channel) is { } column)
+                channels[channel] = Columns(column);
         }
 
-        return [.. Enumerable.Range(0, owners.Count).Select(i => new SampleSeries(times[i], Recorded(channels, i)))];
+        return [.. Enumerable.Range(0, rowsOf.Length).Select(i => new SampleSeries(times[i], Recorded(channels, i)))];
     }
 
     private static Dictionary<Channel, double[]> Recorded(Dictionary<Channel, double[][]> channels, int session) =>

@@ -25,7 +25,7 @@ public static class InspectCommand
         var list = new Option<string?>("--from-list") { Description = "Read the file names from a file, one a line; - is standard input.", HelpName = "LIST" };
         var json = CommonOptions.Json();
         var config = new Option<string?>("--config", "-c") { Description = "Take CSV layouts from this configuration.", HelpName = "FILE" };
-        var command = new Command("inspect", "Say what is in files; nothing is taken in.") { files, list, json, config };
+        var command = new Command("inspect", "Say what is in files as a sweep would decode them; nothing is taken in, nothing is cut, and no owner is asked for.") { files, list, json, config };
         command.Validators.Add(parsed =>
         {
             if (parsed.GetValue(files) is not { Length: > 0 } && parsed.GetValue(list) is null)
@@ -226,9 +226,29 @@ public static class InspectCommand
             output.Write(FormattableString.Invariant($"    {channel,-10} {numbers.N,7} readings, mean {numbers.Mean:0.##}, highest {numbers.Max:0.##}\n"));
         }
 
+        if (line.Shadowed is { } shadowed)
+        {
+            WriteText(output, shadowed);
+        }
+
         foreach (var problem in line.Problems)
         {
             output.Write($"    {problem.Severity}: {OneLine.Of(problem.Text)}\n");
+        }
+    }
+
+    /// <summary>What does not count, since the device states the same itself.</summary>
+    private static void WriteText(StreamWriter output, ShadowedLine shadowed)
+    {
+        foreach (var (channel, numbers) in shadowed.Channels)
+        {
+            output.Write(FormattableString.Invariant($"    {channel,-10} {numbers.N,7} readings by an app beside the device's own, not used: mean {numbers.Mean:0.##}, highest {numbers.Max:0.##}\n"));
+        }
+
+        (string Word, double? Value, string Unit)[] totals = [("elapsed", shadowed.ElapsedS, "s"), ("timer", shadowed.TimerS, "s"), ("distance", shadowed.DistanceM, "m")];
+        foreach (var (word, value, unit) in totals.Where(total => total.Value is not null))
+        {
+            output.Write(FormattableString.Invariant($"    {word,-10} {value:0.##} {unit} by an app beside the device's own, not used\n"));
         }
     }
 

@@ -32,6 +32,10 @@ public sealed record InspectLine(
     [JsonIgnore]
     public string? Table { get; init; }
 
+    /// <summary>What an app on the device states beside the device's own fields; null where nothing is stated twice, and then not written.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public ShadowedLine? Shadowed { get; init; }
+
     public static InspectLine Of(string path, DecodedFile file, Recording recording) => new(
         path,
         file.Kind,
@@ -48,7 +52,10 @@ public sealed record InspectLine(
         recording.Sets.Count,
         recording.Lengths,
         new DeviceLine(recording.Device.Manufacturer, recording.Device.Product, recording.Device.Serial),
-        file.Problems.Select(ProblemLine.Of).ToList());
+        file.Problems.Select(ProblemLine.Of).ToList())
+    {
+        Shadowed = ShadowedLine.Of(recording.Shadowed),
+    };
 
     public static InspectLine WithoutRecording(string path, string kind, IReadOnlyList<Problem> problems) => new(
         path, kind, null, null, null, null, 0, null, null, null, new Dictionary<string, ChannelLine>(), 0, 0, 0, null, problems.Select(ProblemLine.Of).ToList());
@@ -59,11 +66,19 @@ public sealed record InspectLine(
 
 public sealed record ChannelLine(int N, double? Mean, double? Max)
 {
-    public static ChannelLine Of(SampleSeries samples, Channel channel)
-    {
-        var (count, mean, max) = ChannelStatistics.Of(samples, channel);
-        return new ChannelLine(count, mean, max);
-    }
+    public static ChannelLine Of(SampleSeries samples, Channel channel) => Of(ChannelStatistics.Of(samples, channel));
+
+    public static ChannelLine Of(ChannelStatistics numbers) => new(numbers.Count, numbers.Mean, numbers.Max);
+}
+
+/// <summary>Totals and channels as <see cref="InspectLine"/> has them, each null or absent where it is not stated twice.</summary>
+public sealed record ShadowedLine(double? ElapsedS, double? TimerS, double? DistanceM, IReadOnlyDictionary<string, ChannelLine> Channels)
+{
+    public static ShadowedLine? Of(Shadowed shadowed) => shadowed is { ElapsedSeconds: null, TimerSeconds: null, DistanceMetres: null, Channels.Count: 0 } ? null : new(
+        shadowed.ElapsedSeconds,
+        shadowed.TimerSeconds,
+        shadowed.DistanceMetres,
+        shadowed.Channels.ToDictionary(pair => Words.Channel(pair.Key), pair => ChannelLine.Of(pair.Value), StringComparer.Ordinal));
 }
 
 public sealed record DeviceLine(int? Manufacturer, int? Product, long? Serial);

@@ -109,6 +109,71 @@ public class FitDeveloperFieldTests
         Assert.Empty(decoded.Recordings[1].Samples.Channels);
     }
 
+    [Fact]
+    public void WhatTheDeviceStatesItselfCountsAndTheOtherIsShown()
+    {
+        var recording = Assert.Single(Described(Parts.Begin(), PowerField, Unsigned16)
+            .Define(0, new(RecordMessage, Time, new(7, Unsigned16)) { Developer = [new(0, Unsigned16, 0)] })
+            .Message(0, Parts.Base, 200, 300)
+            .Message(0, Parts.Base + 1, FitValue.None, 310)
+            .Message(0, Parts.Base + 2, 220, 340)
+            .Decode().Recordings);
+        Assert.Equal([200, 310, 220], recording.Samples[Channel.Power]);
+        Assert.Equal(new ChannelStatistics(2, 320, 340), Assert.Single(recording.Shadowed.Channels).Value);
+    }
+
+    [Fact]
+    public void WhatIsShownBelongsToItsSession()
+    {
+        var recordings = Described(Parts.Begin(), PowerField, Unsigned16)
+            .Define(0, new(RecordMessage, Time, new(7, Unsigned16)) { Developer = [new(0, Unsigned16, 0)] })
+            .Message(0, Parts.Base, 200, 300)
+            .Message(0, Parts.Base + 100, 220, 340)
+            .DefineSession().Message(1, Parts.Base, 1, 0, 100_000, 100_000).Message(1, Parts.Base + 100, 2, 0, 1000, 1000)
+            .Decode().Recordings;
+        Assert.Equal([300, 340], recordings.Select(recording => recording.Shadowed.Channels[Channel.Power].Max));
+    }
+
+    [Theory]
+    [InlineData(7, "s", 90.5, 90.5)]
+    [InlineData(7, "", 90.5, 90.5)]
+    [InlineData(8, "min", 1.5, 90.0)]
+    [InlineData(8, "ms", 90_500, 90.5)]
+    [InlineData(9, "m", 1234.5, 1234.5)]
+    [InlineData(9, "km", 1.25, 1250.0)]
+    [InlineData(9, "s", 12, null)]
+    [InlineData(7, "m", 12, null)]
+    [InlineData(7, "s", -1, null)]
+    [InlineData(7, "s", double.NaN, null)]
+    public void ATotalOfASessionIsFilledInItsUnit(int field, string unit, double written, double? expected)
+    {
+        var session = Assert.Single(Totals(field, unit).Message(0, Parts.Base, FitValue.None, FitValue.None, FitValue.None, written).Decode().Recordings);
+        double?[] totals = [session.ElapsedSeconds, session.TimerSeconds, session.DistanceMetres];
+        Assert.Equal(Enumerable.Range(7, 3).Select(number => number == field ? expected : null), totals);
+        Assert.Equal(Shadowed.None, session.Shadowed with { Channels = Shadowed.None.Channels });
+    }
+
+    [Theory]
+    [InlineData(7)]
+    [InlineData(8)]
+    [InlineData(9)]
+    public void ATotalThatTheDeviceStatesItselfCounts(int field)
+    {
+        var session = Assert.Single(Totals(field, "").Message(0, Parts.Base, 100_000, 90_000, 50_000, 77).Decode().Recordings);
+        Assert.Equal((100.0, 90.0, 500.0), (session.ElapsedSeconds, session.TimerSeconds, session.DistanceMetres));
+        double?[] shadowed = [session.Shadowed.ElapsedSeconds, session.Shadowed.TimerSeconds, session.Shadowed.DistanceMetres];
+        Assert.Equal(Enumerable.Range(7, 3).Select(number => number == field ? 77.0 : (double?)null), shadowed);
+    }
+
+    [Fact]
+    public void ATotalOfAnotherMessageIsPassedOver() =>
+        Assert.Null(Assert.Single(Totals(9, "m", message: 19).Message(0, Parts.Base, FitValue.None, FitValue.None, FitValue.None, 77).Decode().Recordings).DistanceMetres);
+
+    /// <summary>A session with start, elapsed, timer, distance, and a developer field for one of them.</summary>
+    private static FitPartWriter Totals(int field, string unit, int message = 18) =>
+        Described(Parts.Begin(), field, Real64, unit: unit, message: message)
+            .Define(0, new(18, new(2, Unsigned32), new(7, Unsigned32), new(8, Unsigned32), new(9, Unsigned32)) { Developer = [new(0, Real64, 0)] });
+
     private static FitPartWriter Described(
         FitPartWriter part, int field, FitBaseType type, int scale = 255, string unit = "", int message = RecordMessage) =>
         part

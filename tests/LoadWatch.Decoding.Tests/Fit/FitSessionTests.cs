@@ -156,6 +156,20 @@ public class FitSessionTests
             Assert.Single(decoded.Recordings).Sets);
     }
 
+    /// <summary>The profile's scale belongs to whole numbers; a file may declare another type.</summary>
+    [Theory]
+    [InlineData(Real32)]
+    [InlineData(Real64)]
+    public void RealNumbersAreNotScaled(FitBaseType type)
+    {
+        var session = Assert.Single(Parts.Begin()
+            .Define(1, new(18, new(2, Unsigned32), new(7, type), new(8, type), new(9, type))).Message(1, Parts.Base, 3600.5, 3500.25, 10_000.5)
+            .Define(4, new(225, new(254, Unsigned32), new(0, type), new(4, type), new(5, Unsigned8))).Message(4, Parts.Base + 30, 30.5, 62.5, 1)
+            .Decode().Recordings);
+        Assert.Equal((3600.5, 3500.25, 10_000.5), (session.ElapsedSeconds, session.TimerSeconds, session.DistanceMetres));
+        Assert.Equal((30.5, 62.5), (Assert.Single(session.Sets).DurationSeconds, session.Sets[0].Kilograms));
+    }
+
     [Fact]
     public void AStopThatNothingFollowsIsNoPause()
     {

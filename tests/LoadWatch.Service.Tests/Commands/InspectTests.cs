@@ -1,5 +1,7 @@
 using System.Text.Json;
+using LoadWatch.Decoding.Fit;
 using LoadWatch.Service.Tests.Pipeline;
+using static LoadWatch.Decoding.Fit.FitBaseType;
 
 namespace LoadWatch.Service.Tests.Commands;
 
@@ -46,6 +48,30 @@ public sealed class InspectTests : IDisposable
         Assert.Equal((121, 152.0), (channels.GetProperty("heart_rate").GetProperty("n").GetInt32(), Number(channels.GetProperty("heart_rate"), "max")));
         Assert.Equal(((10 * 1746) + 152) / 121.0, Number(channels.GetProperty("heart_rate"), "mean"), 1e-9);
         Assert.Equal((121, 240.0, 300.0), (channels.GetProperty("power").GetProperty("n").GetInt32(), Number(channels.GetProperty("power"), "mean"), Number(channels.GetProperty("power"), "max")));
+    }
+
+    [Fact]
+    public void WhatAnAppStatesBesideTheDeviceIsShownAndDoesNotCount()
+    {
+        const int start = 1_000_000_000;
+        var description = new FitDefinition(206, new(0, Unsigned8), new(1, Unsigned8), new(2, Unsigned8), new(8, Text, 4), new(14, Unsigned16), new(15, Unsigned8));
+        var path = folder.Put("twice.fit", new FitPartWriter().Define(0, new(0, new FitFieldLayout(0, Enumeration))).Message(0, 4)
+            .Define(1, description).Message(1, 0, 0, (int)Unsigned16, "W", 20, 7).Message(1, 0, 1, (int)Unsigned32, "km", 18, 9)
+            .Define(2, new(20, new(253, Unsigned32), new(7, Unsigned16)) { Developer = [new(0, Unsigned16, 0)] })
+            .Message(2, start, 200, 230).Message(2, start + 1, 210, 250)
+            .Define(3, new(18, new(2, Unsigned32), new(9, Unsigned32)) { Developer = [new(1, Unsigned32, 0)] }).Message(3, start, 50_000, 2).ToBytes());
+        var line = Assert.Single(Inspect(null, path));
+        Assert.Equal(205, Number(line.GetProperty("channels").GetProperty("power"), "mean"));
+        Assert.Equal("""{"elapsed_s":null,"timer_s":null,"distance_m":2000,"channels":{"power":{"n":2,"mean":240,"max":250}}}""", line.GetProperty("shadowed").GetRawText());
+        var text = Loadwatch.Run("inspect", path).Output;
+        Assert.Contains("    power            2 readings by an app beside the device's own, not used: mean 240, highest 250\n    distance   2000 m by an app beside the device's own, not used\n", text, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void ADayWornBesideAWalkIsNamedInTheTextOfItsFile()
+    {
+        var path = folder.Put("days.fit", MonitoringTests.Log(Some.Yesterday.PlusDays(-2), walkedMinutes: 30, wornDaysBehind: 1));
+        Assert.Contains("    beside it a table of days by layout monitoring: 1 rows", Loadwatch.Run("inspect", path).Output, StringComparison.Ordinal);
     }
 
     [Fact]

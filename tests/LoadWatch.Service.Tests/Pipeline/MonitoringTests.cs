@@ -57,7 +57,7 @@ public sealed class MonitoringTests : IDisposable
     private List<DayState> States() => [.. folder.Read((_, session) => session.Days.OfPerson("anna")).Select(day => day.State)];
 
     /// <summary>Heart rate every half hour from six in the morning until ten at night, and a walk at noon of the first day.</summary>
-    private static byte[] Log(LocalDate date, int walkedMinutes, int wornDaysBehind = 0)
+    internal static byte[] Log(LocalDate date, int walkedMinutes, int wornDaysBehind = 0)
     {
         var midnight = (int)(date.AtMidnight().InUtc().ToInstant() - Epoch).TotalSeconds;
         var writer = new FitPartWriter()
