@@ -34,18 +34,11 @@ internal static class AnchorProposals
         Person person, HeartRateMaxEquation byAge, LocalDate month, IReadOnlyList<SessionBests> sessions, IReadOnlyList<ShownMaximum> maxima) =>
     [
         HeartRate(person, byAge, month, sessions),
-        .. OfPower(sessions).SelectMany(sport => new[] { Power(person.Id, month, sport.Key, [.. sport]), PowerMax(person.Id, month, sport.Key, [.. sport]) }),
-        Speed(person.Id, month, [.. sessions.Where(IsRun)]),
+        .. SessionBests.BySport(sessions, Channel.Power).SelectMany(sport => new[] { Power(person.Id, month, sport.Key, [.. sport]), PowerMax(person.Id, month, sport.Key, [.. sport]) }),
+        .. SessionBests.BySport(sessions, Channel.Speed).Select(runs => Speed(person.Id, month, [.. runs])),
         .. maxima.GroupBy(one => (one.Exercise, one.Machine)).OrderBy(same => same.Key.Exercise, StringComparer.Ordinal).ThenBy(same => same.Key.Machine, StringComparer.Ordinal)
             .Select(same => OneRepetition(person.Id, month, [.. same])),
     ];
-
-    private static IEnumerable<IGrouping<string, SessionBests>> OfPower(IEnumerable<SessionBests> sessions) => sessions
-        .Where(session => session.Means.ContainsKey(Channel.Power) && SessionBests.CriticalSport(session.Sport, Channel.Power) is not null)
-        .GroupBy(session => session.Sport.Family, StringComparer.Ordinal)
-        .OrderBy(sport => sport.Key, StringComparer.Ordinal);
-
-    private static bool IsRun(SessionBests session) => SessionBests.CriticalSport(session.Sport, Channel.Speed) is not null && session.Means.ContainsKey(Channel.Speed);
 
     /// <summary>
     /// The highest heart rate held for 15 s that two sessions reached. Of those who never go to their limit it lies below the true one; so it is taken only above what age

@@ -1,6 +1,6 @@
 namespace LoadWatch.Capacity;
 
-/// <summary>P = W' / t + CP: mean power, or speed, on the inverse of time. P, W; t, time to the limit, s.</summary>
+/// <summary>P = W' / t + CP: mean power, or speed, on the inverse of time. P, W; t, time to the limit, s; W', J; CP, W. Of speed: m/s, D', m, and CS, m/s.</summary>
 public static class InverseTimeFit
 {
     /// <inheritdoc cref="WorkTimeFit.Of"/>

@@ -24,6 +24,13 @@ public sealed record SessionBests(string Key, LocalDate Date, Sport Sport, IRead
         };
     }
 
+    /// <summary>Those that may tell a critical power, or speed, by their <see cref="CriticalSport"/>, in the order of its name.</summary>
+    /// <param name="channel">Power, or speed.</param>
+    public static IEnumerable<IGrouping<string, SessionBests>> BySport(IEnumerable<SessionBests> sessions, Channel channel) => sessions
+        .Where(session => session.Means.ContainsKey(channel) && CriticalSport(session.Sport, channel) is not null)
+        .GroupBy(session => session.Sport.Family, StringComparer.Ordinal)
+        .OrderBy(sport => sport.Key, StringComparer.Ordinal);
+
     /// <summary>The best mean of a channel over so many seconds, or null.</summary>
     public double? Best(Channel channel, int seconds) => Means.TryGetValue(channel, out var means) ? means[seconds] : null;
 }

@@ -16,9 +16,9 @@ public static class TimeFit
         }
 
         var reserve = Reserve(trials, critical);
-        var errors = CurvatureErrors.Of(
+        var errors = ParameterCovariance.Of(
             [.. trials.Select(trial => new[] { reserve * Math.Pow(trial.Mean - critical, -2), 1 / (trial.Mean - critical) })], Residuals(trials, critical));
-        return double.IsFinite(reserve) ? new CapacityFit(critical, reserve, errors?[0], errors?[1]) : null;
+        return double.IsFinite(reserve) ? new CapacityFit(critical, reserve, errors?.Error(0), errors?.Error(1)) : null;
     }
 
     private static double[] Residuals(IReadOnlyCollection<Trial> trials, double critical)

@@ -36,9 +36,10 @@ public sealed record TrialChoice(IReadOnlyList<ChosenTrial> Trials, CapacityFit?
     private const double Flat = 1e-6;
 
     /// <summary>However well a line fits, what is measured is no surer than that. Share of the value.</summary>
-    private const double LeastCriticalError = CapacityError.Measured;
+    public const double LeastCriticalError = CapacityError.Measured;
 
-    private const double LeastReserveError = 0.10;
+    /// <inheritdoc cref="LeastCriticalError"/>
+    public const double LeastReserveError = 0.10;
 
     /// <summary>The shortest and the longest duration that is looked at, s.</summary>
     public static IReadOnlyList<int> Span { get; } = [ShortestSeconds, LongestSeconds];

@@ -1,7 +1,7 @@
 namespace LoadWatch.Stimulus;
 
 /// <summary>
-/// What can be given at most at a moment, and for how long a power can be held. Source: Morton 1996, A 3-parameter critical power model, Ergonomics
+/// What can be given at most at a moment. Source: Morton 1996, A 3-parameter critical power model, Ergonomics
 /// 39:611-619. Symbols: CP critical power, W; W' work above it, J; Pmax maximal power, W. The same holds of critical speed, D' and maximal speed.
 /// </summary>
 public static class AvailablePower
@@ -10,11 +10,4 @@ public static class AvailablePower
     /// <param name="balance">W'bal / W', 1 when fresh; 0 or less when exhausted: then critical power is all that is left.</param>
     public static double Watts(double criticalWatts, double maximumWatts, double balance) =>
         criticalWatts + ((maximumWatts - criticalWatts) * Math.Clamp(balance, 0, 1));
-
-    /// <summary>t = W' / (P - CP) - W' / (Pmax - CP), s: how long a power can be held from fresh. 0 at the maximum and above, null at critical power and
-    /// below, where the model knows no end.</summary>
-    public static double? SecondsToExhaustion(double watts, double criticalWatts, double wPrimeJoules, double maximumWatts) =>
-        watts <= criticalWatts ? null
-        : watts >= maximumWatts ? 0
-        : (wPrimeJoules / (watts - criticalWatts)) - (wPrimeJoules / (maximumWatts - criticalWatts));
 }

@@ -30,7 +30,9 @@ public static class AnchorExplanation
         var text = new StringBuilder();
         text.AppendLine(CultureInfo.InvariantCulture, $"{OneLine.Of(known.Name)}, {info.Name} ({ReferenceWords.Of(info.Kind)}){(on == LocalDate.MinIsoValue ? "" : $" on {Words.Date(on)}")}");
         AppendHolding(text, known, book, info.Kind, all, on);
-        AppendObserved(text, basis, known, info.Kind, on);
+        var observed = basis.ObservedOf(known).Where(one => one.Kind == info.Kind).ToList();
+        AppendObserved(text, basis, known, observed, on);
+        TrialText.Append(text, session, known, info.Kind, observed, on);
         text.AppendLine(CultureInfo.InvariantCulture, $"    plausible from {info.Lowest.ToString("0.###", CultureInfo.InvariantCulture)} to {AnchorText.Value(info.Highest, info.Kind)}; a measured value goes before one from own sessions, that before one by an equation");
         text.AppendLine(CultureInfo.InvariantCulture, $"    rests on it: {RestsOn(info.Kind)}");
         return text.ToString();
@@ -90,12 +92,11 @@ public static class AnchorExplanation
         ? book.On(on, one.Person, one.Kind, Recordings.Sport.Parse(sport))
         : book.On(on, one.Person, one.Kind, one.Exercise, one.Machine);
 
-    private static void AppendObserved(StringBuilder text, TableBasis basis, Person person, AnchorKind kind, LocalDate on)
+    private static void AppendObserved(StringBuilder text, TableBasis basis, Person person, List<ObservedAnchor> observed, LocalDate on)
     {
-        var observed = basis.ObservedOf(person).Where(one => one.Kind == kind).ToList();
         foreach (var one in observed)
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    from own sessions of the 12 months before {Words.Date(one.From)}: {AnchorText.Value(one.Value, kind)} within {AnchorText.Value(one.Error, kind)}, last shown on {Words.Date(one.ShownOn)}: {OneLine.Of(one.Basis)}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    from own sessions of the 12 months before {Words.Date(one.From)}: {AnchorText.Value(one.Value, one.Kind)} within {AnchorText.Value(one.Error, one.Kind)}, last shown on {Words.Date(one.ShownOn)}: {OneLine.Of(one.Basis)}");
         }
 
         ReferenceExplanation.AppendContradictions(text, on, observed, basis.StatedOf(person));

@@ -47,7 +47,44 @@ public class CapacityFitTests
 
         Assert.Equal((232.266, 14841.6, -44.004), (Math.Round(fit.Fit.Critical, 3), Math.Round(fit.Fit.Reserve, 1), Math.Round(fit.AsymptoteSeconds, 3)));
         Assert.Equal(569.55, fit.Maximum, 2);
-        Assert.True(fit.Fit is { CriticalError: > 0, ReserveError: > 0 });
+        Assert.Equal((0.2692, 265.487, 3.7128), (Math.Round(fit.Fit.CriticalError!.Value, 4), Math.Round(fit.Fit.ReserveError!.Value, 3), Math.Round(fit.AsymptoteError!.Value, 4)));
+    }
+
+    /// <summary>
+    /// By an independent computation with P_max as the third parameter itself, t = W' / (P - CP) - W' / (P_max - CP): 22.8859 W, which the delta method has to meet; without the
+    /// covariances it would be 29.09 W.
+    /// </summary>
+    [Fact]
+    public void TheHighestPowerIsAsSureAsWhereItIsAParameterItself()
+    {
+        var fit = ThreeParameterFit.Of(PublishedTrials.Of(3))!;
+
+        Assert.Equal(22.8859, fit.MaximumError!.Value, 4);
+    }
+
+    [Fact]
+    public void AsManyTrialsAsParametersLeaveNothingOverForAnError()
+    {
+        var (critical, reserve, maximum) = (250.0, 18_000.0, 900.0);
+        var fit = ThreeParameterFit.Of([.. new[] { 275.0, 310, 400 }.Select(watts => Trial.OfMean((reserve / (watts - critical)) - (reserve / (maximum - critical)), watts))]);
+
+        Assert.True(fit is null or { MaximumError: null, AsymptoteError: null, Fit: { CriticalError: null, ReserveError: null } });
+    }
+
+    /// <summary>By hand: on the line of two parameters k is 0 but for rounding, and P_max would be without end.</summary>
+    [Fact]
+    public void OnTheLineOfTwoParametersThereIsNoThird() => Assert.Null(ThreeParameterFit.Of([Trial.OfMean(120, 400), Trial.OfMean(300, 310), Trial.OfMean(720, 275)]));
+
+    [Fact]
+    public void AllRegressionsOfTheSameTrialsAreThoseOfEachAlone()
+    {
+        var trials = PublishedTrials.Of(3);
+        var all = TrialRegressions.Of(trials);
+
+        Assert.Equal((WorkTimeFit.Of(trials), InverseTimeFit.Of(trials), TimeFit.Of(trials), ThreeParameterFit.Of(trials)), (all.WorkTime, all.InverseTime, all.Time, all.ThreeParameter));
+        Assert.Equal(4, all.All.Count);
+        Assert.Equal(3, TrialRegressions.Of(PublishedTrials.Of(1)).All.Count);
+        Assert.Empty(TrialRegressions.Of([]).All);
     }
 
     /// <summary>The same source: with the others the third parameter degenerates.</summary>

@@ -29,6 +29,7 @@ public sealed class ExplainAnchorTests : IDisposable
                 holds: critical_power = 250 W, measured, holds from 2026-01-10; taken to be within 2 % (an assumption for measured values)
                 not yet: critical_power = 260 W, measured, holds from 2026-06-20; taken to be within 2 % (an assumption for measured values)
                 not used: critical_power = 300 W, estimated, holds from 2026-03-01; taken to be within 20 % (an assumption for estimated values)
+                no session of the 12 months before 2026-06-01 may tell it: wanted is power with unbroken stretches of 2 minutes and more, not on foot and of no motor
                 plausible from 20 to 600 W; a measured value goes before one from own sessions, that before one by an equation
                 rests on it: zones of power, stimulus by power
 
@@ -57,6 +58,55 @@ public sealed class ExplainAnchorTests : IDisposable
 
         Assert.Contains("not read for the stimulus (below 2.5 times critical_power, so it is not from a sprint): power_max cycling = 400 W, observed, holds from 2026-06-01, last shown on 2026-05-30; taken to be within 10 % (an assumption for observed values)", told, StringComparison.Ordinal);
         Assert.Contains("from own sessions of the 12 months before 2026-06-01: 400 W within 20 W, last shown on 2026-05-30: highest mean power of 1 s in the 6 months before", told, StringComparison.Ordinal);
+    }
+
+    /// <summary>
+    /// By hand: W = 18 kJ + 250 W t at 120, 300 and 720 s; whole watts leave nothing over, so every regression finds the same and errors are the least ones: 2 % of 250 W, 10 % of 18 kJ.
+    /// </summary>
+    [Theory]
+    [InlineData("critical_power")]
+    [InlineData("w_prime")]
+    public void TheBestsAndAllRegressionsStandBesideEachOther(string kind)
+    {
+        folder.Fill(AllOutRides.Season());
+        folder.Sweep();
+
+        var told = Explained("anna", kind, AllOutRides.Last);
+
+        Assert.Contains("    the 12 months before 2026-06-01, cycling: 3 bests that may have been all out, from 3 sessions", told, StringComparison.Ordinal);
+        Assert.Matches("        120 s at 400 W on 2026-05-06, session [0-9a-f]{12}\r?\n        300 s at 310 W on 2026-05-13, session [0-9a-f]{12}\r?\n        720 s at 275 W on 2026-05-20", told);
+        Assert.Contains("        work on time, W = W' + CP t: 250 W (standard error 0 W), W' 18000 J (standard error 0 J), R2 1", told, StringComparison.Ordinal);
+        Assert.Contains("        power on the inverse of time, P = CP + W' / t: 250 W (standard error 0 W), W' 18000 J", told, StringComparison.Ordinal);
+        Assert.Contains("        least squares in time, t = W' / (P - CP): 250 W (standard error 0 W), W' 18000 J", told, StringComparison.Ordinal);
+        Assert.Contains("        three parameters, least squares in time, t = W' / (P - CP) + k: none, the third parameter degenerates with these bests", told, StringComparison.Ordinal);
+        Assert.Contains("        taken: work on time, as the bests are chosen on its upper edge (a choice); 250 W within 5 W, W' 18000 J within 1800 J: its standard errors, but 2 and 10 % at least", told, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void WithoutAValueTheReasonStands()
+    {
+        folder.Fill(AllOutRides.Season().Skip(1));
+        folder.Sweep();
+
+        Assert.Contains(
+            "    the 12 months before 2026-06-01, cycling: no value; bests that may have been all out: ", Explained("anna", "critical_power", AllOutRides.Last), StringComparison.Ordinal);
+        Assert.Contains(
+            "    no session of the 12 months before 2026-06-01 may tell it: wanted is speed on foot", Explained("anna", "d_prime", AllOutRides.Last), StringComparison.Ordinal);
+    }
+
+    /// <summary>The value of June goes on in August: the bests of its 12 months are the same, and those of the next but one summer are gone.</summary>
+    [Fact]
+    public void AValueThatGoesOnTellsTheBestsOfItsMonthAndThoseOfTheDate()
+    {
+        folder.Fill(AllOutRides.Season());
+        folder.Sweep();
+
+        var (august, later) = (Explained("anna", "critical_power", new LocalDate(2026, 8, 10)), Explained("anna", "critical_power", new LocalDate(2027, 8, 10)));
+
+        Assert.Contains("    the 12 months before 2026-06-01, cycling: 3 bests", august, StringComparison.Ordinal);
+        Assert.Contains("    the 12 months before 2026-08-01, cycling: the same bests", august, StringComparison.Ordinal);
+        Assert.Contains("    the 12 months before 2027-08-01, cycling: no session that shows it", later, StringComparison.Ordinal);
+        Assert.Contains("        so the value of 2026-06-01 goes on: another has to lie beyond its error", later, StringComparison.Ordinal);
     }
 
     /// <summary>Measured two years ago against seen last month: the estimator reads the second, 183 days being the bound.</summary>

@@ -13,7 +13,7 @@ public sealed class ObservedAnchorsTests : IDisposable
 {
     private static readonly LocalDate June = new(2026, 6, 1);
 
-    private static readonly LocalDate Shown = new(2026, 6, 8);
+    private static readonly LocalDate Shown = AllOutRides.Last;
 
     private readonly WorkingFolder folder = new();
 
@@ -23,7 +23,7 @@ public sealed class ObservedAnchorsTests : IDisposable
     [Fact]
     public void EffortsOfAMonthGiveTheNextMonthsCapacity()
     {
-        folder.Fill(Season());
+        folder.Fill(AllOutRides.Season());
         folder.Sweep();
 
         var observed = Observed();
@@ -37,7 +37,7 @@ public sealed class ObservedAnchorsTests : IDisposable
     [Fact]
     public void ARebuildGivesTheSameRows()
     {
-        folder.Fill(Season());
+        folder.Fill(AllOutRides.Season());
         folder.Sweep();
         var (before, observed) = (folder.Everything(), Observed());
 
@@ -51,10 +51,10 @@ public sealed class ObservedAnchorsTests : IDisposable
     [Fact]
     public void NeitherOrderNorNightsMatter()
     {
-        folder.Fill(Season());
+        folder.Fill(AllOutRides.Season());
         folder.Sweep();
         using var other = new WorkingFolder();
-        foreach (var (file, night) in Season().Reverse().Select((file, night) => (file, night)))
+        foreach (var (file, night) in AllOutRides.Season().Reverse().Select((file, night) => (file, night)))
         {
             other.Fill([file]);
             other.Sweep(WorkingFolder.Now - Duration.FromDays(4 - night));
@@ -70,7 +70,7 @@ public sealed class ObservedAnchorsTests : IDisposable
     [Fact]
     public void WhatOneImportTellsIsKnownBeforeItsSessionsAreComputed()
     {
-        folder.Fill(Season());
+        folder.Fill(AllOutRides.Season());
 
         Assert.Equal(0, folder.Sweep().Recomputed);
         Assert.Equal([false, false, false, true], Rides().Select(HasPowerZones));
@@ -106,10 +106,10 @@ public sealed class ObservedAnchorsTests : IDisposable
     {
         var date = new LocalDate(2025, 6, 3).PlusMonths(number * 5 % 12).PlusDays(number / 4);
         int[] seconds = [120, 300, 720];
-        yield return ($"anna/{number:00}.fit", Ride(date, seconds[number % 3], number));
+        yield return ($"anna/{number:00}.fit", AllOutRides.Ride(date, seconds[number % 3], number));
         if (number % 8 == 0)
         {
-            yield return ($"anna/{number:00} short.fit", Ride(date, seconds[number % 3], number, length: 1400));
+            yield return ($"anna/{number:00} short.fit", AllOutRides.Ride(date, seconds[number % 3], number, length: 1400));
         }
     }
 
@@ -117,11 +117,11 @@ public sealed class ObservedAnchorsTests : IDisposable
     [Fact]
     public void ALateFileChangesWhatComesBehindItsMonth()
     {
-        folder.Fill(Season().Skip(1));
+        folder.Fill(AllOutRides.Season().Skip(1));
         folder.Sweep();
         Assert.DoesNotContain(true, Rides().Select(HasPowerZones));
 
-        folder.Fill(Season().Take(1));
+        folder.Fill(AllOutRides.Season().Take(1));
         folder.Sweep();
 
         Assert.Equal([false, false, false, true], Rides().Select(HasPowerZones));
@@ -131,7 +131,7 @@ public sealed class ObservedAnchorsTests : IDisposable
     public void AMeasuredValueWinsAndTheContradictionIsShown()
     {
         folder.Write("anchors.csv", $"{WorkingFolder.Anchors.TrimEnd()}\nanna,2026-05-30,critical_power,300,W,,\n");
-        folder.Fill(Season());
+        folder.Fill(AllOutRides.Season());
         folder.Sweep();
 
         Assert.Equal(250, Value(Observed(), AnchorKind.CriticalPower));
@@ -162,29 +162,6 @@ public sealed class ObservedAnchorsTests : IDisposable
     private static (string Path, byte[] Bytes) Heart(int day, int beginning) => ($"anna/may{day}.fit", Some.Fit(new LocalDate(2026, 5, day), heartRate: beginning));
 
     private double Trimp() => folder.Activities("anna")[^1].Value("banister_trimp")!.Value;
-
-    private static IReadOnlyList<(string Path, byte[] Bytes)> Season() =>
-    [
-        ("anna/a.fit", Ride(new LocalDate(2026, 5, 6), 120)),
-        ("anna/b.fit", Ride(new LocalDate(2026, 5, 13), 300)),
-        ("anna/c.fit", Ride(new LocalDate(2026, 5, 20), 720)),
-        ("anna/d.fit", Ride(Shown, 0)),
-    ];
-
-    /// <summary>25 minutes at 100 W, of which the first after 5 minutes as hard as can be for so long.</summary>
-    /// <param name="more">Watts above that.</param>
-    /// <param name="length">Seconds in all.</param>
-    private static byte[] Ride(LocalDate date, int seconds, int more = 0, int length = 1500)
-    {
-        var ride = Some.Ride(date);
-        return FitEncoder.Encode(ride with
-        {
-            Samples = [.. Enumerable.Range(0, length + 1).Select(second => new FitSample(
-                ride.Start + Duration.FromSeconds(second),
-                Power: second >= 300 && second < 300 + seconds ? 250 + more + (18_000 / seconds) : 100,
-                Distance: 8.0 * second))],
-        });
-    }
 
     private static double Value(IReadOnlyList<ObservedAnchor> observed, AnchorKind kind) => Math.Round(observed.Single(one => one.Kind == kind).Value, 3);
 

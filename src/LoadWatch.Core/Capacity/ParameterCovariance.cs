@@ -1,11 +1,18 @@
 namespace LoadWatch.Capacity;
 
-/// <summary>Standard errors of the parameters of a least-squares fit: the roots of the diagonal of s^2 (J'J)^-1, s^2 = squares left / (n - p). Textbook.</summary>
-internal static class CurvatureErrors
+/// <summary>
+/// How sure the parameters of a least-squares fit are, and what is computed from them: the covariance is s^2 (J'J)^-1 with the derivatives J and s^2 = squares left / (n - p).
+/// A standard error is the root of its diagonal; that of a function of the parameters with the gradient g is sqrt(g' C g) (the delta method). Textbook.
+/// </summary>
+internal sealed class ParameterCovariance
 {
-    /// <summary>In the order of the parameters; null where there are no more points than parameters, or the derivatives depend on each other.</summary>
+    private readonly double[][] covariance;
+
+    private ParameterCovariance(double[][] covariance) => this.covariance = covariance;
+
+    /// <summary>Null where there are no more points than parameters, or the derivatives depend on each other.</summary>
     /// <param name="derivatives">J: of each point by each parameter.</param>
-    public static double[]? Of(IReadOnlyList<double[]> derivatives, IReadOnlyList<double> residuals)
+    public static ParameterCovariance? Of(IReadOnlyList<double[]> derivatives, IReadOnlyList<double> residuals)
     {
         var (points, parameters) = (derivatives.Count, derivatives[0].Length);
         if (points <= parameters || Inverse(Normal(derivatives, parameters)) is not { } inverse)
@@ -14,8 +21,19 @@ internal static class CurvatureErrors
         }
 
         var variance = residuals.Sum(residual => residual * residual) / (points - parameters);
-        double[] errors = [.. Enumerable.Range(0, parameters).Select(at => Math.Sqrt(variance * inverse[at][at]))];
-        return Array.TrueForAll(errors, double.IsFinite) ? errors : null;
+        double[][] values = [.. inverse.Select(row => row.Select(value => variance * value).ToArray())];
+        return Enumerable.Range(0, parameters).All(at => double.IsFinite(Math.Sqrt(values[at][at]))) ? new ParameterCovariance(values) : null;
+    }
+
+    /// <summary>Standard error of a parameter.</summary>
+    public double Error(int parameter) => Math.Sqrt(covariance[parameter][parameter]);
+
+    /// <summary>Standard error of a function of the parameters.</summary>
+    /// <param name="gradient">Its derivative by each parameter.</param>
+    public double ErrorOf(IReadOnlyList<double> gradient)
+    {
+        var variance = covariance.Select((row, one) => row.Select((value, other) => gradient[one] * value * gradient[other]).Sum()).Sum();
+        return Math.Sqrt(Math.Max(variance, 0));
     }
 
     private static double[][] Normal(IReadOnlyList<double[]> derivatives, int parameters) =>
