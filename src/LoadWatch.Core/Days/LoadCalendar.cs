@@ -8,7 +8,7 @@ namespace LoadWatch.Days;
 public static class LoadCalendar
 {
     /// <summary>Raised when days or findings come out otherwise of the same sessions: then everybody's are computed anew, and nothing is decoded.</summary>
-    public const int Version = 5;
+    public const int Version = 6;
 
     /// <summary>No value and no rule looks further back than this; what would is carried (<see cref="Carried"/>). Days.</summary>
     public const int LookBackDays = 400;

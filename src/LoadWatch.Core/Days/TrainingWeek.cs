@@ -9,10 +9,9 @@ namespace LoadWatch.Days;
 /// <summary>Seven days in a row by their sessions.</summary>
 /// <param name="UpTo">Its last date.</param>
 /// <param name="Load">As if every session of it were known; null where too few days are.</param>
-/// <param name="Trained">Days with a known load above 0, count.</param>
-/// <param name="IsPlanned">Whether a plan tells of a recording to come on one of its days.</param>
+/// <param name="Known">What of it is.</param>
 /// <param name="IsSetAside">One of its days is (<see cref="PlanPhases.IsSetAside"/>).</param>
-internal readonly record struct TrainingWeek(LocalDate UpTo, double? Load, int Trained, bool IsPlanned, bool IsSetAside)
+internal readonly record struct TrainingWeek(LocalDate UpTo, double? Load, KnownWeek Known, bool IsSetAside)
 {
     private const int Length = 7;
 
@@ -21,6 +20,12 @@ internal readonly record struct TrainingWeek(LocalDate UpTo, double? Load, int T
     /// <param name="coveredOf7">Known days that a week must have.</param>
     public static IEnumerable<TrainingWeek> Before(IReadOnlyList<Day> days, int last, int weeks, int coveredOf7) =>
         PastWeek.Ends(last, weeks).Select(index => EndingAt(days, index, coveredOf7));
+
+    /// <summary>Days with a known load above 0, count.</summary>
+    public int Trained => Known.Trained;
+
+    /// <summary>Whether a plan tells of a recording to come on one of its days.</summary>
+    public bool IsPlanned => Known.IsPlanned;
 
     /// <summary>The week as one to compare with.</summary>
     public PastWeek Past => new(UpTo, Load, IsSetAside);
@@ -39,13 +44,8 @@ internal readonly record struct TrainingWeek(LocalDate UpTo, double? Load, int T
             aside |= day.Plan.IsSetAside();
         }
 
-        var load = known < coveredOf7 ? null : known == Length ? sum : Whole(sum, known, trained, Math.Max(trained + unread, expected), expected > 0);
-        return new TrainingWeek(days[index].Date, load is { } whole ? Significant.Round(whole) : null, trained, expected > 0, aside);
+        var week = new KnownWeek(Significant.Round(sum), known, trained, Math.Max(trained + unread, expected), expected > 0);
+        var load = known < coveredOf7 ? null : week.Whole;
+        return new TrainingWeek(days[index].Date, load is { } whole ? Significant.Round(whole) : null, week, aside);
     }
-
-    /// <summary>Without a plan, and where no session is missing, days of which nothing says whether there was training count as the known ones do.</summary>
-    private static double? Whole(double sum, int known, int trained, int sessions, bool planned) =>
-        sessions == trained && !planned ? sum * Length / known
-        : trained == 0 ? null
-        : sum * sessions / trained;
 }

@@ -68,6 +68,10 @@ public sealed class WeeklyJumpRule : IRule
         var weeks = before.ConvertAll(one => one.Past);
         return WeekChange.Of(week.Load, weeks) is { } change && Usual(week, before, limits) is { } usual
             ? new Jump(days[index].Date, change.Acute, change.BeforeUpTo, change.Before, usual.Load, change.Fraction, usual.Factor)
+            {
+                Known = week.Known,
+                KnownBefore = before.Find(one => one.UpTo == change.BeforeUpTo).Known,
+            }
             : null;
     }
 
@@ -105,11 +109,24 @@ public sealed class WeeklyJumpRule : IRule
 
     private static string Sentence(WatchedSeries series, LocalDate date, LocalDate since, Jump read, WeeklyJumpLimits limits)
     {
-        var week = read.BeforeUpTo == read.Date.PlusDays(-WeekDays) ? "the week before" : $"the last ordinary week, up to {Wording.Date(read.BeforeUpTo, date)}";
-        var numbers = $"{Wording.Number(read.Acute)} against {Wording.Number(read.Before)} {series.Unit}, usually {Wording.Number(read.Usual)}";
-        var what = $"{series.Heading} of the last 7 days {Wording.Is(read.Date, date)} {Wording.Percent(read.Change, limits.Raise)} more than {week} ({numbers})";
+        var last = read.BeforeUpTo == read.Date.PlusDays(-WeekDays) ? "the week before" : $"the last ordinary week, up to {Wording.Date(read.BeforeUpTo, date)}";
+        var week = $"{series.Heading} of the last 7 days{AsTold(read.Known, ",")} {Wording.Is(read.Date, date)} {Wording.Percent(read.Change, limits.Raise)} more";
+        var numbers = $"{Wording.Number(read.Acute)}{OfIt(read.Known, ",")} against {Wording.Number(read.Before)} {series.Unit}{OfIt(read.KnownBefore)}, usually {Wording.Number(read.Usual)}";
+        var what = $"{week} than {last}{AsTold(read.KnownBefore)} ({numbers})";
         return $"{what}{Wording.NotKnownSince(read.Date, date)}{Against(read, Wording.Date(since, date), limits)}.";
     }
+
+    /// <summary><c>, as 3 of 5 sessions tell</c> for a week that was made whole; else nothing.</summary>
+    private static string AsTold(KnownWeek? week, string end = "") => week switch
+    {
+        { IsScaledToSessions: true } known => $", as {known.Trained} of {known.Sessions} sessions tell{end}",
+        { IsScaledToDays: true } known => $", as {known.Days} of {WeekDays} days tell{end}",
+        _ => "",
+    };
+
+    /// <summary><c>, 372 of it known</c> for a week that was made whole; else nothing.</summary>
+    private static string OfIt(KnownWeek? week, string end = "") =>
+        week is { IsScaledToSessions: true } or { IsScaledToDays: true } ? $", {Wording.Number(week.Value.Sum)} of it known{end}" : "";
 
     private static string Against(Jump read, string since, WeeklyJumpLimits limits) => read.Change >= limits.Raise
         ? $"; the limit is {Wording.Percent(limits.Raise)}, passed since {since}"
@@ -117,13 +134,16 @@ public sealed class WeeklyJumpRule : IRule
 
     private static Evidence Basis(Jump read, WeeklyJumpLimits limits, string unit) => new(
         "change = (load of the last 7 days - load of the last ordinary week) / the latter, and the last 7 days against the median of the ordinary weeks before; "
-            + "a week with sessions missing is scaled to its sessions; without a plan the usual is that of weeks with as many training days",
+            + "a week with sessions missing is scaled to them: known load x sessions / known sessions, and where none is missing but days are unknown: known load x 7 / known days; "
+            + "without a plan the usual is that of weeks with as many training days",
         "a choice",
         [
             new("change", read.Change, "fraction", $"on {Wording.IsoDate(read.Date)}"),
-            new("acute", read.Acute, unit, "load of the last 7 days"),
-            new("before", read.Before, unit, $"the week up to {Wording.IsoDate(read.BeforeUpTo)}"),
-            new("usual", read.Usual, unit, "median of the ordinary weeks"),
+            new("acute", read.Acute, unit, $"load of the last 7 days{AsTold(read.Known)}"),
+            .. Of(read.Known, "acute", unit),
+            new("before", read.Before, unit, $"the week up to {Wording.IsoDate(read.BeforeUpTo)}{AsTold(read.KnownBefore)}"),
+            .. Of(read.KnownBefore, "before", unit),
+            new("usual", read.Usual, unit, "median of the ordinary weeks, each as if all its sessions were known"),
             new("raise", limits.Raise, "fraction"),
             new("return", limits.Return, "fraction"),
             new("usual_factor", read.Factor, "ratio"),
@@ -134,6 +154,21 @@ public sealed class WeeklyJumpRule : IRule
             new("off_days", limits.OffDays, "days"),
         ]);
 
+    private static EvidenceItem[] Of(KnownWeek? week, string name, string unit) =>
+    [
+        new($"{name}_known", week?.Sum, unit, "of the known days"),
+        new($"{name}_known_days", week?.Days, "days"),
+        new($"{name}_known_sessions", week?.Trained, "count"),
+        new($"{name}_sessions", week?.Sessions, "count", "with training, or expected by the plan"),
+    ];
+
     /// <summary>What a date shows; loads in the series' unit.</summary>
-    private sealed record Jump(LocalDate Date, double Acute, LocalDate BeforeUpTo, double Before, double Usual, double Change, double Factor);
+    private sealed record Jump(LocalDate Date, double Acute, LocalDate BeforeUpTo, double Before, double Usual, double Change, double Factor)
+    {
+        /// <summary>What is known of the last 7 days; null where a former version read them.</summary>
+        public KnownWeek? Known { get; init; }
+
+        /// <summary>The same of the week before.</summary>
+        public KnownWeek? KnownBefore { get; init; }
+    }
 }

@@ -113,4 +113,65 @@ public class WeeklyJumpRuleTests
         Assert.All(found, finding => Assert.Equal(new FindingKey("anna", "weekly_jump", null, "distance"), finding.Key));
         Assert.StartsWith("Distance of the last 7 days is 51 % more than the week before (53000 against 35000 m", found[0].Text, StringComparison.Ordinal);
     }
+
+    /// <summary>Five sessions of 100 a week, of the last week the plan expects five and three of 140 came: 420, and 700 for all five, against 500. The two that did not come are unknown.</summary>
+    [Fact]
+    public void AWeekScaledToItsSessionsIsToldAsScaledWithItsKnownLoad()
+    {
+        var finding = Rule.Of(PlannedWeeks(missing: [56, 57]), limits: AtOnce).First(one => one.Date == On(60));
+
+        Assert.Equal(
+            "Load of the last 7 days, as 3 of 5 sessions tell, is 40 % more than the week before (700, 420 of it known, against 500 AU, usually 500); the limit is 40 %, passed since 6 March.",
+            finding.Text);
+        Assert.Equal((700, 420, 5, 3, 5), Known(finding, "acute"));
+        Assert.Equal("load of the last 7 days, as 3 of 5 sessions tell", Item(finding, "acute").Note);
+        Assert.Equal((500, 500, 7, 5, 5), Known(finding, "before"));
+    }
+
+    /// <summary>One of the five sessions of the week before is unknown: 400, and 500 for all five.</summary>
+    [Fact]
+    public void SoIsTheWeekBefore()
+    {
+        var finding = Rule.Of(PlannedWeeks(missing: [50]), limits: AtOnce).First(one => one.Date == On(60));
+
+        Assert.Contains("40 % more than the week before, as 4 of 5 sessions tell (700 against 500 AU, 400 of it known, usually 500)", finding.Text, StringComparison.Ordinal);
+        Assert.Equal((500, 400, 6, 4, 5), Known(finding, "before"));
+        Assert.Equal((700, 700, 7, 5, 5), Known(finding, "acute"));
+    }
+
+    /// <summary>Without a plan a day of which nothing is known counts as the others do: 6 of 80 are 480, and 560 for seven.</summary>
+    [Fact]
+    public void AWeekScaledToItsDaysIsToldAsScaled()
+    {
+        var days = LoadCalendar.Build("anna", [.. Enumerable.Range(0, 70).Where(day => day != 58).Select(day => Activity(day, day < 56 ? 50 : 80))], On(69))
+            .Select(day => day.Date == On(58) ? day with { State = DayState.Unknown, Load = null } : day)
+            .ToList();
+        var finding = Rule.Of(days).First(one => one.Date == On(62));
+
+        Assert.Contains(
+            "Load of the last 7 days, as 6 of 7 days tell, is 60 % more than the week before (560, 480 of it known, against 350 AU, usually 350)", finding.Text, StringComparison.Ordinal);
+        Assert.Equal((560, 480, 6, 6, 6), Known(finding, "acute"));
+    }
+
+    private static (double?, double?, double?, double?, double?) Known(Finding finding, string week) => (
+        Item(finding, week).Value,
+        Item(finding, $"{week}_known").Value,
+        Item(finding, $"{week}_known_days").Value,
+        Item(finding, $"{week}_known_sessions").Value,
+        Item(finding, $"{week}_sessions").Value);
+
+    private static EvidenceItem Item(Finding finding, string name) => finding.Evidence.Inputs.Single(item => item.Name == name);
+
+    /// <summary>Sessions expected on five days of every week, 100 each, and 140 in the week from day 56 on; those missing are unknown.</summary>
+    internal static List<Day> PlannedWeeks(int[] missing) => Enumerable.Range(0, 63)
+        .Select(day => (Day: day, Expected: day % 7 < 5, Missing: missing.Contains(day)))
+        .Select(one => new Day
+        {
+            Person = "anna",
+            Date = On(one.Day),
+            State = one.Missing ? DayState.Unknown : one.Expected ? DayState.Recorded : DayState.Rest,
+            Load = one.Missing ? null : !one.Expected ? 0 : one.Day < 56 ? 100 : 140,
+            Plan = DayPlan.None with { Expected = one.Expected ? 1 : 0 },
+        })
+        .ToList();
 }
