@@ -91,7 +91,8 @@ public sealed class LoadRatioRule : IRule
     };
 
     private static Evidence Basis(Ratio read, LoadRatioLimits limits, string loadUnit) => new(
-        "uncoupled ratio = load of the last 7 days / mean week of the 21 days before, both scaled to their known days",
+        "uncoupled ratio = load of the last 7 days / mean week of the 21 days before, both scaled to their known days; raised where the mean week of the last 28 days also exceeds a "
+            + "share of its own median, and the last 7 days a multiple of the usual week (median of ordinary weeks), where one is known",
         "Windt and Gabbett 2018, Br J Sports Med 53:988-990; limits: a choice",
         [
             new("ratio_uncoupled", read.RatioUncoupled, "ratio", $"on {Wording.IsoDate(read.Date)}"),
@@ -100,6 +101,7 @@ public sealed class LoadRatioRule : IRule
             new("ratio_coupled", read.RatioCoupled, "ratio"),
             new("chronic", read.Chronic, loadUnit, "mean week of the last 28 days"),
             new("chronic_median", read.ChronicMedian, loadUnit, "median of chronic over the last 365 days"),
+            new("usual_week", read.UsualWeek, loadUnit, "median of the ordinary weeks before"),
             new("coverage_7", read.Coverage7, "share"),
             new("coverage_28", read.Coverage28, "share"),
             new("days_since_first_covered", read.DaysSinceFirstCovered, "days"),
@@ -111,6 +113,7 @@ public sealed class LoadRatioRule : IRule
             new("covered_of_7_wanted", limits.CoveredOf7, "days"),
             new("covered_of_28_wanted", limits.CoveredOf28, "days"),
             new("chronic_share_of_median_wanted", limits.ChronicShareOfMedian, "share"),
+            new("usual_factor_wanted", limits.UsualFactor, "ratio"),
         ]);
 
     /// <summary>What a date shows; loads in the series' unit.</summary>
@@ -126,6 +129,9 @@ public sealed class LoadRatioRule : IRule
         double Coverage28,
         int? DaysSinceFirstCovered)
     {
+        /// <summary>Null where too few ordinary weeks are known, and where a former version read it.</summary>
+        public double? UsualWeek { get; init; }
+
         public static Ratio Of(Day day) => new(
             day.Date,
             day.RatioUncoupled!.Value,
@@ -136,6 +142,9 @@ public sealed class LoadRatioRule : IRule
             day.ChronicMedian,
             day.Coverage7,
             day.Coverage28,
-            day.DaysSinceFirstCovered);
+            day.DaysSinceFirstCovered)
+        {
+            UsualWeek = day.UsualWeek,
+        };
     }
 }

@@ -92,8 +92,18 @@ public sealed class StimulusGapRule : IRule
             new("notice", gap.Limit.NoticeDays, "days"),
             new("warning", gap.Limit.WarningDays, "days"),
             new("older_from", limits.OlderFrom, "years"),
+            .. gap.Age >= limits.OlderFrom ? OfOlder(limits) : [],
             new("known_share_wanted", limits.CoveredShare, "share"),
         ]);
+
+    /// <summary>What notice and warning of an older person come from, beside the usual gap.</summary>
+    private static EvidenceItem[] OfOlder(StimulusGapLimits limits) =>
+    [
+        new("least_notice", limits.NoticeDays, "days"),
+        new("older_usual_gap_factor", limits.OlderUsualGapFactor, "ratio", "notice at this multiple of the usual gap where that is later"),
+        new("older_least_warning", limits.OlderWarningDays, "days"),
+        new("older_warning_after_notice", limits.OlderWarningAfterNoticeDays, "days"),
+    ];
 
     /// <summary>A region's gap as read on a date.</summary>
     private sealed record Gap(LocalDate Date, int Days, RegionDay Region, int? Age, StimulusGapLimit Limit, bool Never);

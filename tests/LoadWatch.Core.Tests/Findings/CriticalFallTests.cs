@@ -279,6 +279,9 @@ public class CriticalFallTests
     private static List<Finding> Evaluate(IEnumerable<Session> season, FallingCapacityLimits? limits = null, Person? person = null, DayPlan? plan = null, int length = 112) =>
         new FallingCapacityRule().Evaluate(Subject([.. season], limits ?? new(), person ?? Anna, plan ?? DayPlan.None, length)).Told();
 
+    /// <summary>Somebody whose critical power fell by a tenth.</summary>
+    internal static RuleSubject Fallen(RuleLimits limits) => Subject([.. Season(day => day < 56 ? 250 : 225)], new(), Anna, DayPlan.None, 112) with { Limits = limits };
+
     private static RuleSubject Subject(List<Session> season, FallingCapacityLimits limits, Person person, DayPlan plan, int length) =>
         new(person, [.. DaysOf(season, plan, length)], new RuleLimits { FallingCapacity = limits })
         {
