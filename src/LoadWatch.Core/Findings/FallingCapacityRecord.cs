@@ -11,7 +11,7 @@ internal sealed class FallingCapacityRecord : RuleRecord
 
     public override string TimeToRespond => "Within two weeks, by a try under the same conditions.";
 
-    public override string Decides => KeyWords.CoachAndPerson;
+    public override Deciders Deciders => Deciders.CoachAndPerson;
 
     public override string Ends => "The fall is clearly within the error again, read on recorded days.";
 

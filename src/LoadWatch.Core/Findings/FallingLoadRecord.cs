@@ -11,7 +11,7 @@ internal sealed class FallingLoadRecord : RuleRecord
 
     public override string TimeToRespond => "Within a week.";
 
-    public override string Decides => KeyWords.CoachAndPerson;
+    public override Deciders Deciders => Deciders.CoachAndPerson;
 
     public override string Ends => "The mean week of the last 21 days, or as many as the limits say, is back at its return value, on readable dates.";
 

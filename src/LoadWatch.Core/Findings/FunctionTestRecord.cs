@@ -11,7 +11,7 @@ internal sealed class FunctionTestRecord : RuleRecord
 
     public override string TimeToRespond => "Within two weeks, by a test under the same conditions.";
 
-    public override string Decides => "the person, with their clinician";
+    public override Deciders Deciders => Deciders.PersonAndClinician;
 
     public override string Ends => "The next test of its kind that is better by some; else the test ages.";
 

@@ -11,7 +11,7 @@ internal sealed class HardDaysRecord : RuleRecord
 
     public override string TimeToRespond => "Before the next hard session or match, within a day.";
 
-    public override string Decides => KeyWords.CoachAndPerson;
+    public override Deciders Deciders => Deciders.CoachAndPerson;
 
     public override string Ends => "Days that are clearly easier, or few matches within the days up to the date.";
 

@@ -6,10 +6,6 @@ namespace LoadWatch.Findings;
 /// <summary>What a finding is about, in the words of the rules' records.</summary>
 internal static class KeyWords
 {
-    public const string CoachAndPerson = "the person and their coach";
-
-    public const string WithClinician = "the person and their coach; with their clinician where one looks after them";
-
     public static string Load(FindingKey key) => key.Quantity is { } quantity ? QuantityWords.Of(quantity) : "load";
 
     /// <summary>Behind "usual".</summary>

@@ -11,11 +11,11 @@ internal sealed class LoadRatioRecord : RuleRecord
 
     public override string TimeToRespond => "Before the next hard session, within a day.";
 
-    public override string Decides => KeyWords.CoachAndPerson;
+    public override Deciders Deciders => Deciders.CoachAndPerson;
 
     public override string Ends => "The ratio falls below its return value, on readable dates.";
 
-    public override string DataNeeded => "Known load on most of the last 7 and of the last 28 days, and four weeks since the first known day.";
+    public override string DataNeeded => "Known load on most of the last 7 and of the last 28 days, and four weeks since the first known day; the usual week where enough ordinary weeks are known.";
 
     public override string Basis =>
         "Windt and Gabbett 2018, Br J Sports Med 53:988-990, for the uncoupled ratio; that it is watched and its coverage are a choice; limit, return value and delay were fitted by simulation. It describes change, nothing else.";

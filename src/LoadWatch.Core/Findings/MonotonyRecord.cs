@@ -11,7 +11,7 @@ internal sealed class MonotonyRecord : RuleRecord
 
     public override string TimeToRespond => "Within this week.";
 
-    public override string Decides => KeyWords.CoachAndPerson;
+    public override Deciders Deciders => Deciders.CoachAndPerson;
 
     public override string Ends => "Monotony falls below its return value, or the week is no heavier than the usual, on readable dates.";
 

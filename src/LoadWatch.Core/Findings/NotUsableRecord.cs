@@ -11,7 +11,7 @@ internal sealed class NotUsableRecord : RuleRecord
 
     public override string TimeToRespond => "Before the next session.";
 
-    public override string Decides => "the person; whoever looks after the devices";
+    public override Deciders Deciders => Deciders.PersonAndDevices;
 
     public override string Ends => "Few enough of them within the days up to a recorded day.";
 

@@ -1,4 +1,5 @@
 using System.Text.Json.Serialization;
+using LoadWatch.People;
 
 namespace LoadWatch.Findings;
 
@@ -20,7 +21,8 @@ public abstract class RuleRecord
     /// <summary>Within which time a look makes a difference. A choice.</summary>
     public abstract string TimeToRespond { get; }
 
-    public abstract string Decides { get; }
+    /// <summary>Who decides.</summary>
+    public abstract Deciders Deciders { get; }
 
     /// <summary>What ends it.</summary>
     public abstract string Ends { get; }
@@ -57,7 +59,7 @@ public abstract class RuleRecord
         ("consequence", Consequence),
         ("response", $"Consider {Response(new FindingKey("", rule, null), self: false)}"),
         ("time to respond", TimeToRespond),
-        ("who decides", Decides),
+        ("who decides", Deciders.Told),
         ("ends", Ends),
         ("data needed", DataNeeded),
         ("basis", Basis),
@@ -70,10 +72,12 @@ public abstract class RuleRecord
         return Fields(rule)
             .Append(("says", Says))
             .Append(("response", Response(key, self: true)))
+            .Concat(Enum.GetValues<ContactRole>().Select(role => ("who decides", Deciders.For(role))))
             .Append(("counted", Counted(key)))
             .Append(("named", Named(key, self: false)))
             .Append(("returned", Returned(key, new RuleLimits(), self: false)))
             .Where(field => string.IsNullOrWhiteSpace(field.Item2))
-            .Select(field => field.Item1);
+            .Select(field => field.Item1)
+            .Distinct(StringComparer.Ordinal);
     }
 }

@@ -11,7 +11,7 @@ internal sealed class SessionSpikeRecord : RuleRecord
 
     public override string TimeToRespond => "Before the next session of its kind, within a day.";
 
-    public override string Decides => KeyWords.CoachAndPerson;
+    public override Deciders Deciders => Deciders.CoachAndPerson;
 
     public override string Ends => "Some known days after the session, by itself.";
 

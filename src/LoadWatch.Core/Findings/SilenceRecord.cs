@@ -11,7 +11,7 @@ internal sealed class SilenceRecord : RuleRecord
 
     public override string TimeToRespond => "Within two days.";
 
-    public override string Decides => "the person; whoever looks after devices and uploads";
+    public override Deciders Deciders => Deciders.PersonAndUploads;
 
     public override string Ends => "The next recording.";
 

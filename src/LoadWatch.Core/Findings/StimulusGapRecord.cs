@@ -11,7 +11,7 @@ internal sealed class StimulusGapRecord : RuleRecord
 
     public override string TimeToRespond => "Within the next two sessions.";
 
-    public override string Decides => KeyWords.WithClinician;
+    public override Deciders Deciders => Deciders.WithClinician;
 
     public override string Ends => "A heavy-or-fast day of the region, and nothing else.";
 

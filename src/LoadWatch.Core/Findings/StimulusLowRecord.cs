@@ -11,7 +11,7 @@ internal sealed class StimulusLowRecord : RuleRecord
 
     public override string TimeToRespond => "Within a week.";
 
-    public override string Decides => KeyWords.WithClinician;
+    public override Deciders Deciders => Deciders.WithClinician;
 
     public override string Ends => "Enough heavy-or-fast days in 14 again.";
 

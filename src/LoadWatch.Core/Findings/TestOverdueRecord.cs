@@ -11,7 +11,7 @@ internal sealed class TestOverdueRecord : RuleRecord
 
     public override string TimeToRespond => "At the next visit.";
 
-    public override string Decides => "the clinician, with the person";
+    public override Deciders Deciders => Deciders.ClinicianAndPerson;
 
     public override string Ends => "The next test of its kind, also one that could not be done.";
 

@@ -11,7 +11,7 @@ internal sealed class WeeklyJumpRecord : RuleRecord
 
     public override string TimeToRespond => "Before the next week is planned, within two days.";
 
-    public override string Decides => KeyWords.CoachAndPerson;
+    public override Deciders Deciders => Deciders.CoachAndPerson;
 
     public override string Ends => "The change against the last ordinary week falls below its return value, on readable dates.";
 

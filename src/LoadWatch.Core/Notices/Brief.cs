@@ -62,8 +62,8 @@ public sealed record FlaggedPerson(string PersonId, string Name, Severity Severi
     /// <summary>The last 56 days; null where no picture is wanted.</summary>
     public PersonPicture? Picture { get; init; }
 
-    /// <summary>One sentence, the gravest reason first: what, since when, against the usual, what else, what to consider, who decides.</summary>
-    public string Sentence => $"{What}; consider {Consider}; decides: {Decides}.";
+    /// <summary>One sentence, the gravest reason first: what, since when, against the usual, what else, what to consider, by when, who decides.</summary>
+    public string Sentence => $"{What}; consider {Consider}; {(When.Length == 0 ? "" : $"when: {When}; ")}decides: {Decides}.";
 
     /// <summary>The first part of the sentence, without a full stop.</summary>
     public string What => PersonSentence.What(this);
@@ -71,8 +71,11 @@ public sealed record FlaggedPerson(string PersonId, string Name, Severity Severi
     /// <summary>What to consider about the gravest reason, without a full stop.</summary>
     public string Consider => PersonSentence.Part(Reasons[0].Consider);
 
+    /// <summary>Within which time the gravest reason wants a look, without a full stop; may be empty.</summary>
+    public string When => PersonSentence.Lowered(PersonSentence.Part(Reasons[0].TimeToRespond));
+
     /// <summary>Everybody named as deciding over one of the reasons, once.</summary>
-    public string Decides => string.Join("; ", Reasons.Select(reason => PersonSentence.Part(reason.Decides)).Distinct(StringComparer.Ordinal));
+    public string Decides => string.Join("; ", PersonSentence.WithoutBeginnings([.. Reasons.Select(reason => PersonSentence.Part(reason.Decides)).Distinct(StringComparer.Ordinal)]));
 
     /// <summary><c>new</c>, or since when the gravest reason stands.</summary>
     public string Since => PersonSentence.Since(Reasons[0]);
@@ -97,6 +100,9 @@ public sealed record FlaggedReason(
 {
     /// <summary>The thing itself: <c>load well above the usual</c>; empty where only the sentence says it.</summary>
     public string Named { get; init; } = "";
+
+    /// <summary>Within which time a look makes a difference; empty where that is not told.</summary>
+    public string TimeToRespond { get; init; } = "";
 
     /// <summary>The date on which it was raised; null where that is not told.</summary>
     public LocalDate? Raised { get; init; }

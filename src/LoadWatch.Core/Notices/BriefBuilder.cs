@@ -96,7 +96,7 @@ public static class BriefBuilder
         var room = RowsAtMost - (bare.Calls?.Calls.Count ?? 0);
         return bare with
         {
-            Flagged = [.. Named(flagged, room).Select(subject => Flag(subject, contact.Role, upTo, self))],
+            Flagged = [.. Named(flagged, room).Select(subject => Flag(subject, self ? ContactRole.Self : contact.Role == ContactRole.Self ? ContactRole.Coach : contact.Role, upTo, self))],
             FlaggedBeyond = Math.Max(0, flagged.Count - room),
             Returned = [.. shown.SelectMany(subject => Returned(subject, self))],
             Changed = [.. shown.SelectMany(subject => Changed(subject, self))],
@@ -182,11 +182,12 @@ public static class BriefBuilder
         news.Alert.Severity,
         OneLine.Sentence(news.Alert.Text),
         RuleTexts.Consider(news.Alert.Key, self),
-        RuleTexts.Decides(role),
+        RuleTexts.Decides(news.Alert.Key.Rule, role),
         news.IsNew,
         news.Alert.State == AlertState.Acknowledged)
     {
         Named = RuleTexts.Named(news.Alert.Key, self),
+        TimeToRespond = RuleTexts.TimeToRespond(news.Alert.Key.Rule),
         Raised = news.Alert.Raised,
     };
 

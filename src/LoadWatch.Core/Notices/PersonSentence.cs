@@ -41,5 +41,9 @@ internal static class PersonSentence
         };
     }
 
-    private static string Lowered(string text) => text.Length == 0 ? text : char.ToLowerInvariant(text[0]) + text[1..];
+    /// <summary>Without what another one begins with and says more of.</summary>
+    public static IEnumerable<string> WithoutBeginnings(IReadOnlyList<string> parts) =>
+        parts.Where(part => !parts.Any(other => other != part && other.StartsWith(part, StringComparison.Ordinal)));
+
+    public static string Lowered(string text) => text.Length == 0 ? text : char.ToLowerInvariant(text[0]) + text[1..];
 }

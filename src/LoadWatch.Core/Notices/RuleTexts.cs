@@ -29,16 +29,11 @@ public static class RuleTexts
     public static string Consider(FindingKey key, bool self) =>
         RuleBook.Of(key.Rule)?.Record.Response(key, self) ?? "a look at the numbers behind it before changing anything.";
 
+    /// <summary>Within which time a look makes a difference, a sentence; empty where that is not known.</summary>
+    public static string TimeToRespond(string rule) => RuleBook.Of(rule)?.Record.TimeToRespond ?? "";
+
     /// <summary>Who decides, as the reader of this role is told.</summary>
-    public static string Decides(ContactRole role) => role switch
-    {
-        ContactRole.Coach => "you and the person",
-        ContactRole.Physiotherapist => "the person and their coach, with what you know",
-        ContactRole.Clinician => "the person, with you",
-        ContactRole.FrontDesk => "the person and their coach or clinician; please pass it on",
-        ContactRole.Self => "you, with your clinician where one looks after you",
-        _ => throw new ArgumentOutOfRangeException(nameof(role)),
-    };
+    public static string Decides(string rule, ContactRole role) => (RuleBook.Of(rule)?.Record.Deciders ?? Deciders.CoachAndPerson).For(role);
 
     /// <summary>How an alert ended.</summary>
     /// <param name="limits">In force for the person.</param>

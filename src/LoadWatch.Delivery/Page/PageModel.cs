@@ -67,7 +67,8 @@ internal sealed record PageModel(
 
 /// <summary>One person to act on: the parts of one sentence.</summary>
 /// <param name="Since"><c>new</c>, or since when; may be empty.</param>
-internal sealed record PagePerson(string Name, string Severity, string Since, string What, string Consider, string Decides, PagePicture? Picture)
+/// <param name="When">Within which time it wants a look; may be empty.</param>
+internal sealed record PagePerson(string Name, string Severity, string Since, string What, string Consider, string When, string Decides, PagePicture? Picture)
 {
     /// <summary>What a picture would say, where none can be drawn.</summary>
     public string? PictureWords { get; init; }
@@ -78,6 +79,7 @@ internal sealed record PagePerson(string Name, string Severity, string Since, st
         person.Since,
         OneLine.Of(person.What),
         OneLine.Of(person.Consider),
+        OneLine.Of(person.When),
         OneLine.Of(person.Decides),
         person.Picture is { } picture && pictures.CanDraw ? new PagePicture(picture) : null)
     {

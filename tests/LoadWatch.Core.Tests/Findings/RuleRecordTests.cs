@@ -1,4 +1,5 @@
 using LoadWatch.Findings;
+using LoadWatch.People;
 using LoadWatch.Stimulus;
 
 namespace LoadWatch.Tests.Findings;
@@ -44,6 +45,28 @@ public class RuleRecordTests
         RuleBook.All.SelectMany(rule => rule.Record.Fields(rule.Name).Select(field => field.Text).Append(rule.Record.Says)),
         text => Assert.DoesNotContain(word, text, StringComparison.OrdinalIgnoreCase));
 
+    /// <summary>Who decides is of the record: heavy work of somebody older is no matter of the coach alone, a dead strap none of training.</summary>
+    [Theory]
+    [InlineData("load_ratio", ContactRole.Coach, "you and the person")]
+    [InlineData("load_ratio", ContactRole.Clinician, "the person and their coach, with what you know")]
+    [InlineData("load_ratio", ContactRole.Self, "you, with your coach or clinician where you have one")]
+    [InlineData("stimulus_gap", ContactRole.Coach, "you and the person, with their clinician where one looks after them")]
+    [InlineData("stimulus_low", ContactRole.Clinician, "the person, with you")]
+    [InlineData("not_usable", ContactRole.Coach, "the person, and whoever looks after the devices")]
+    [InlineData("silence", ContactRole.FrontDesk, "the person, and whoever looks after devices and uploads, please pass it on")]
+    [InlineData("test_overdue", ContactRole.Clinician, "you, with the person")]
+    [InlineData("function_test", ContactRole.Self, "you, with your clinician")]
+    public void WhoDecidesIsToldByTheRuleAndToTheReader(string rule, ContactRole role, string decides) =>
+        Assert.Equal(decides, RuleBook.Of(rule)!.Record.Deciders.For(role));
+
+    [Fact]
+    public void NoReaderIsToldOfThemselvesAsOfSomebodyElse() => Assert.All(RuleBook.All, rule =>
+    {
+        Assert.DoesNotContain("the person", rule.Record.Deciders.Self, StringComparison.Ordinal);
+        Assert.DoesNotContain("their coach", rule.Record.Deciders.Coach, StringComparison.Ordinal);
+        Assert.DoesNotContain("clinician", rule.Record.Deciders.Clinician, StringComparison.Ordinal);
+    });
+
     [Fact]
     public void OnlyRulesOfTestsAreOfHealth() =>
         Assert.Equal(["function_test", "test_overdue"], RuleBook.All.Where(rule => rule.Record.IsOfHealth).Select(rule => rule.Name));
@@ -73,7 +96,7 @@ public class RuleRecordTests
 
         public override string TimeToRespond => "";
 
-        public override string Decides => "some";
+        public override Deciders Deciders => new("some", "some", "some", "some", "some", "some");
 
         public override string Ends => "some";
 

@@ -201,7 +201,8 @@ public sealed class BriefBuilderTests
         var brief = BriefBuilder.Build(Oneself("a"), Today, [Subject("a", "Ann", LoadRatio("a"), StimulusGap("a"))], []);
         Assert.Equal("To look at: load well above your usual and no heavy or fast leg work lately.", brief.FirstLine);
         Assert.Equal("You", Assert.Single(brief.Flagged).Name);
-        Assert.Equal("you, with your clinician where one looks after you", brief.Flagged[0].Reasons[0].Decides);
+        Assert.Equal("you, with your coach or clinician where you have one; you, with your clinician where one looks after you", brief.Flagged[0].Decides);
+        Assert.Equal("before the next hard session, within a day", brief.Flagged[0].When);
         Assert.Contains("what you had planned", brief.Flagged[0].Reasons[0].Consider, StringComparison.Ordinal);
         Assert.Contains("you and your clinician allow", brief.Flagged[0].Reasons[1].Consider, StringComparison.Ordinal);
         Assert.DoesNotContain("Ann", BriefText.Write(brief), StringComparison.Ordinal);
@@ -209,14 +210,13 @@ public sealed class BriefBuilderTests
     }
 
     [Theory]
-    [InlineData(ContactRole.Coach, "you and the person")]
-    [InlineData(ContactRole.Physiotherapist, "the person and their coach, with what you know")]
-    [InlineData(ContactRole.Clinician, "the person, with you")]
-    [InlineData(ContactRole.FrontDesk, "the person and their coach or clinician; please pass it on")]
-    public void WhoDecidesDependsOnTheReader(ContactRole role, string expected)
+    [InlineData(ContactRole.Coach, "the person, and whoever looks after devices and uploads; you and the person, with their clinician where one looks after them")]
+    [InlineData(ContactRole.Clinician, "the person, and whoever looks after devices and uploads; the person and their coach, with what you know; the person, with you")]
+    [InlineData(ContactRole.Self, "the person, and whoever looks after devices and uploads; you and the person, with their clinician where one looks after them")]
+    public void WhoDecidesDependsOnTheReasonsAndTheReader(ContactRole role, string expected)
     {
-        var brief = BriefBuilder.Build(Contact(role), Today, [Subject("a", "Ann", Silence("a"))], []);
-        Assert.Equal(expected, brief.Flagged[0].Reasons[0].Decides);
+        var brief = BriefBuilder.Build(Contact(role), Today, [Subject("a", "Ann", Silence("a"), LoadRatio("a"), StimulusGap("a")), Subject("b", "Ben")], []);
+        Assert.Equal(expected.Split("; ").Order(), brief.Flagged[0].Decides.Split("; ").Order());
     }
 
     [Fact]

@@ -17,8 +17,8 @@ public sealed class BriefTextTests
         TO LOOK AT
         - Ann Tarrow (warning, new): Load of the last 7 days is 1.94 times the usual
           week since 27 February; consider comparing with what was planned: an
-          easier day, or keeping the plan if it was meant; decides: you and the
-          person.
+          easier day, or keeping the plan if it was meant; when: before the next
+          hard session, within a day; decides: you and the person.
           56 days to 28 Feb. The last 7 days: 480 AU; a usual week: 400 AU, the
           middle half of 7 weeks. Load on 42 days, the highest 80 AU on 28 Feb; none
           on 14. Heavy or fast leg work on 14 days, the last on 27 Feb.

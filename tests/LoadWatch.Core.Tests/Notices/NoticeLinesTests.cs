@@ -12,7 +12,7 @@ public sealed class NoticeLinesTests
             "2026-03-01 ada 2/6 Morning brief for Ada Merriweather, Sunday 1 March 2026 Data up to Saturday 28 February 2026",
             "2026-03-01 ada 3/6 1 of 2 to look at: 1 well above their usual. 1 person without a known day in the last week. 1 question needs an answer.",
             "2026-03-01 ada 4/6 to look at: Ann Tarrow (warning, new): Load of the last 7 days is 1.94 times the usual week since 27 February; "
-                + "consider comparing with what was planned: an easier day, or keeping the plan if it was meant; decides: you and the person. "
+                + "consider comparing with what was planned: an easier day, or keeping the plan if it was meant; when: before the next hard session, within a day; decides: you and the person. "
                 + "56 days to 28 Feb. The last 7 days: 480 AU; a usual week: 400 AU, the middle half of 7 weeks. Load on 42 days, the highest 80 AU on 28 Feb; "
                 + "none on 14. Heavy or fast leg work on 14 days, the last on 27 Feb.",
             "2026-03-01 ada 5/6 no longer to look at: Ben Ollery: Heavy or fast leg work is back.",

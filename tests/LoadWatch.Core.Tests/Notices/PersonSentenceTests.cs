@@ -11,7 +11,7 @@ public sealed class PersonSentenceTests
     [Fact]
     public void OneFindingIsOneSentenceFromWhatToWhoDecides() => Assert.Equal(
         "Load of the last 7 days is 1.94 times the usual week since 27 February; consider comparing with what was planned: an easier day, or keeping the plan if it was meant; "
-            + "decides: you and the person.",
+            + "when: before the next hard session, within a day; decides: you and the person.",
         Told(LoadRatio("a")).Sentence);
 
     /// <summary>Two weeks of training in one raise several rules at once: it is one thing to think about.</summary>
