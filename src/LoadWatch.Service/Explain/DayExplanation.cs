@@ -41,9 +41,10 @@ public static class DayExplanation
             text.AppendLine(CultureInfo.InvariantCulture, $"    {quiet.Sentence(day.Date)}");
         }
 
-        AppendTrends(text, day, configuration.GroupOf(known));
+        var limits = new TodaysLimits(configuration, basis);
+        LoadTrendText.Append(text, day, limits.DaysTo(session, known, day.Date), configuration.GroupOf(known));
         DayTrendText.Append(text, day, session.Days.Before(known.Id, day.Date.PlusDays(1), day.Date));
-        RoomText.Append(text, new TodaysLimits(configuration, basis), session, known, date is null ? [day.Date, day.Date.PlusDays(1)] : [day.Date]);
+        RoomText.Append(text, limits, session, known, date is null ? [day.Date, day.Date.PlusDays(1)] : [day.Date]);
         ReferenceExplanation.Append(text, known, configuration.GroupOf(known), basis, day.Date);
         ReferenceExplanation.AppendObserved(text, known, basis, day.Date);
         TestText.Append(text, session, basis, known, day.Date);
@@ -84,25 +85,4 @@ public static class DayExplanation
         DecisionKind.Ill or DecisionKind.Injured or DecisionKind.Away => !(day > decision.Until),
         _ => day <= (decision.Until ?? decision.From),
     };
-
-    private static void AppendTrends(StringBuilder text, Day day, Group group)
-    {
-        Line(text, $"load ({group.LoadQuantity})", day.Load);
-        Line(text, "acute: sum of 7 days, scaled to the covered ones", day.Acute);
-        Line(text, "chronic: mean week of 28 days, scaled to the covered ones", day.Chronic);
-        Line(text, "mean week of days 8 to 28 back", day.ChronicBefore);
-        Line(text, "ratio, coupled = acute / chronic", day.RatioCoupled);
-        Line(text, "ratio, uncoupled = acute / mean week of days 8 to 28 back", day.RatioUncoupled);
-        Line(text, "ratio of exponential averages, 7 and 28 days (Williams 2017)", day.RatioEwma);
-        Line(text, "change against the week before, fraction", day.WeeklyChange);
-        Line(text, $"monotony = mean / SD ({group.Deviation.Divisor()}) of 7 days (Foster 1998)", day.Monotony);
-        Line(text, "strain = week x monotony (Foster 1998)", day.Strain);
-        Line(text, "share of 7 days with known load", day.Coverage7);
-        Line(text, "share of 28 days with known load", day.Coverage28);
-    }
-
-    private static void Line(StringBuilder text, string name, double? value) =>
-        text.AppendLine(CultureInfo.InvariantCulture, $"    {name} = {Number(value)}");
-
-    private static string Number(double? value) => value is { } known ? known.ToString("0.###", CultureInfo.InvariantCulture) : "unknown";
 }

@@ -15,17 +15,25 @@ public sealed class TodaysLimits(WorkingConfiguration configuration, TableBasis 
     /// <summary>Null where the date before it is not computed.</summary>
     public TodaysRoom? Of(StoreSession session, Person person, LocalDate date)
     {
-        var group = configuration.GroupOf(person);
-        var periods = ReferencePeriods.Of(person, group, basis.AnchorsOf(person));
-        var days = session.Days.Before(person.Id, date, First(periods, date));
-        if (days.Count == 0 || days[^1].Date != date.PlusDays(-1))
-        {
-            return null;
-        }
+        var (days, changes) = Before(session, person, date);
+        return days.Count == 0 || days[^1].Date != date.PlusDays(-1)
+            ? null
+            : Behind(person, configuration.GroupOf(person), days, new PersonPlans(configuration).Of(session, person, date, date), changes);
+    }
 
-        var changes = new ReferenceChanges(periods, () => new RestatedSessions(
-            person, basis.AnchorsOf(person), configuration.Computation, periods.Quantities, session.Activities.Histograms(person.Id, days[0].Date, date)));
-        return Behind(person, group, days, new PersonPlans(configuration).Of(session, person, date, date), changes);
+    /// <summary>The days up to a date as they are stored, their loads by the reference values of that date (I-15).</summary>
+    public IReadOnlyList<Day> DaysTo(StoreSession session, Person person, LocalDate date)
+    {
+        var (days, changes) = Before(session, person, date.PlusDays(1));
+        return new SeriesByValues(person, configuration.GroupOf(person), changes, changes.Periods.On(date)).Before(days, date.PlusDays(1));
+    }
+
+    private (IReadOnlyList<Day> Days, ReferenceChanges Changes) Before(StoreSession session, Person person, LocalDate date)
+    {
+        var periods = ReferencePeriods.Of(person, configuration.GroupOf(person), basis.AnchorsOf(person));
+        var days = session.Days.Before(person.Id, date, First(periods, date));
+        return (days, new ReferenceChanges(periods, () => new RestatedSessions(
+            person, basis.AnchorsOf(person), configuration.Computation, periods.Quantities, session.Activities.Histograms(person.Id, days[0].Date, date))));
     }
 
     /// <summary>The first of the days that are looked back at from a date.</summary>
