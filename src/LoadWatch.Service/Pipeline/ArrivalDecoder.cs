@@ -180,8 +180,11 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
 
     private IEnumerable<Recording> Usable(ReadContents read) => read.Recordings().Where(recording => ArrivalVerdict.IsUsable(recording, now));
 
-    private string? Implausible(UsableRecording recording, Person person) =>
-        Plausibility.Of(recording, person, Basis.AnchorsOf(person), LocalStart.DateOf(recording.Recording, person));
+    private string? Implausible(UsableRecording recording, Person person)
+    {
+        var date = LocalStart.DateOf(recording.Recording, person);
+        return Plausibility.Of(recording, person, Basis.AnchorsOf(person, date), date);
+    }
 
     /// <summary>Folders only name people of the roster; one whom a decision names may have left it since.</summary>
     private ArrivalVerdict OfTheRoster(ArrivalVerdict verdict) =>
@@ -260,11 +263,12 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     private ActivityValues Values(UsableRecording usable, Person person, TableBasis basis)
     {
         var recording = usable.Recording;
-        var planned = basis.Planned(person, LocalStart.DateOf(recording, person));
+        var date = LocalStart.DateOf(recording, person);
+        var (planned, anchors) = (basis.Planned(person, date), basis.AnchorsOf(person, date));
         var cut = SessionWindow.Of(recording, planned) is { } window ? RecordingCut.To(recording, window.Start, window.End) : CutRecording.Nothing(recording);
         var values = cut.LeftOut.Count == 0
-            ? ActivityComputation.Compute(usable, person, basis.AnchorsOf(person), configuration.Computation)
-            : ActivityComputation.Compute(cut.Recording, person, basis.AnchorsOf(person), configuration.Computation);
+            ? ActivityComputation.Compute(usable, person, anchors, configuration.Computation)
+            : ActivityComputation.Compute(cut.Recording, person, anchors, configuration.Computation);
         IReadOnlyList<string> missing = recording.CutOff is { } reason ? [$"only its beginning is used: {reason}"] : [];
         return cut.LeftOut.Count + missing.Count == 0
             ? values

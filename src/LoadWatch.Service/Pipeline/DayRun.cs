@@ -33,7 +33,7 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
     private const int QuestionDays = 60;
 
     private readonly PersonPlans plans = new(configuration);
-    private readonly Lazy<ReferencePeriods> periods = new(() => ReferencePeriods.Of(person, configuration.GroupOf(person), basis.AnchorsOf(person)));
+    private readonly Lazy<ReferencePeriods> periods = new(() => ReferencePeriods.Of(person, configuration.GroupOf(person), basis.AnchorsOf(person, from)));
     private LocalDate? replacedTo;
     private IReadOnlyList<Day>? before;
     private LocalDate? next;
@@ -95,7 +95,7 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
 
     private ReferenceChanges Changes(StoreSession session, LocalDate since, LocalDate to) => new(periods.Value, () => new RestatedSessions(
         person,
-        basis.AnchorsOf(person),
+        basis.AnchorsOf(person, from),
         configuration.Computation,
         periods.Value.Quantities,
         session.Activities.Histograms(person.Id, since, to)));
@@ -109,7 +109,7 @@ public sealed class DayRun(WorkingConfiguration configuration, TableBasis basis,
     /// <summary>Asked when such a value is adopted, and not again each month.</summary>
     private IEnumerable<Question> Contradictions()
     {
-        var (observed, stated) = (basis.ObservedOf(person), basis.StatedOf(person));
+        var (observed, stated) = (basis.ObservedOf(person, from), basis.StatedOf(person));
         return observed.Select(one => one.From).Distinct()
             .SelectMany(month => AnchorContradiction.On(month, observed, stated).Where(one => one.Observed.From == month).Select(one => new Question(person.Id, month, one.Words, month)));
     }

@@ -28,6 +28,6 @@ public static class PersonTraining
             .Select(row => new OwnedRow(row.Layout, row.Date, row.Key, row.Content).ByClockOf(person))
             .Where(row => !(row.Date < from) && !(row.Date > to))
             .ToList();
-        return ActivityJoin.Join(person, recorded, rows, sets.Count == 0 ? AnchorBook.Empty : basis.AnchorsOf(person), configuration.Computation);
+        return ActivityJoin.Join(person, recorded, rows, sets.Count == 0 ? AnchorBook.Empty : basis.AnchorsOf(person, from), configuration.Computation);
     }
 }

@@ -18,7 +18,7 @@ public sealed class TableBasis
 {
     private readonly WorkingConfiguration configuration;
     private readonly Action<Action<StoreSession>> read;
-    private readonly ConcurrentDictionary<string, AnchorBook> anchors = new(StringComparer.Ordinal);
+    private readonly ConcurrentDictionary<string, PersonAnchors> anchors = new(StringComparer.Ordinal);
     private readonly ConcurrentDictionary<(string Person, LocalDate Month), IReadOnlyList<PlanEntry>> planned;
 
     private TableBasis(
@@ -43,12 +43,29 @@ public sealed class TableBasis
     public static TableBasis Of(WorkingConfiguration configuration, StoreSession session) => new(configuration, work => work(session));
 
     /// <summary>A person's reference values, of the configuration, of the tables and from own sessions.</summary>
-    public AnchorBook AnchorsOf(Person person) => anchors.GetOrAdd(person.Id, _ => Book(person, ObservedOf(person)));
+    /// <param name="first">What is asked for are dates from this one on; null: any.</param>
+    public AnchorBook AnchorsOf(Person person, LocalDate? first = null) => Known(person, first ?? LocalDate.MinIsoValue).Book;
 
-    private AnchorBook Book(Person person, IReadOnlyList<ObservedAnchor> observed)
+    /// <summary>Those from own sessions alone, sorted by month.</summary>
+    /// <inheritdoc cref="AnchorsOf"/>
+    public IReadOnlyList<ObservedAnchor> ObservedOf(Person person, LocalDate? first = null) => Known(person, first ?? LocalDate.MinIsoValue).Observed;
+
+    /// <summary>Who is asked for earlier dates as well is read once more, and then whole.</summary>
+    private PersonAnchors Known(Person person, LocalDate first)
+    {
+        if (anchors.TryGetValue(person.Id, out var known) && known.First <= first)
+        {
+            return known;
+        }
+
+        var from = known is null ? first : LocalDate.MinIsoValue;
+        return anchors[person.Id] = Of(person, from, Read(session => session.ObservedAnchors.OfPerson(person.Id, from)));
+    }
+
+    private PersonAnchors Of(Person person, LocalDate first, IReadOnlyList<ObservedAnchor> observed)
     {
         var stated = StatedOf(person);
-        return observed.Count == 0 ? stated : stated.OfPerson(person.Id).With(observed.Select(one => one.ToAnchor()));
+        return new PersonAnchors(first, observed, observed.Count == 0 ? stated : stated.OfPerson(person.Id).With(observed.Select(one => one.ToAnchor())));
     }
 
     /// <summary>The same with other values from own sessions of some people.</summary>
@@ -56,14 +73,14 @@ public sealed class TableBasis
     public TableBasis With(IReadOnlyDictionary<string, IReadOnlyList<ObservedAnchor>> observed)
     {
         var other = new TableBasis(configuration, read, planned);
-        foreach (var (person, book) in anchors.Where(one => !observed.ContainsKey(one.Key)))
+        foreach (var (person, known) in anchors.Where(one => !observed.ContainsKey(one.Key)))
         {
-            other.anchors[person] = book;
+            other.anchors[person] = known;
         }
 
         foreach (var (person, own) in observed)
         {
-            other.anchors[person] = Book(configuration.People[person], own);
+            other.anchors[person] = Of(configuration.People[person], LocalDate.MinIsoValue, own);
         }
 
         return other;
@@ -75,9 +92,6 @@ public sealed class TableBasis
         var measured = Read(session => session.TableRows.StandingOf(person.Id, RowKind.Tests)).Select(AnchorOf).OfType<Anchor>().ToList();
         return measured.Count == 0 ? configuration.Anchors : configuration.Anchors.OfPerson(person.Id).With(measured);
     }
-
-    /// <summary>Those from own sessions alone, sorted by month.</summary>
-    public IReadOnlyList<ObservedAnchor> ObservedOf(Person person) => Read(session => session.ObservedAnchors.OfPerson(person.Id));
 
     /// <summary>Whether recordings are computed differently by such a row.</summary>
     public static bool Matters(StoredRow row) => IsTimed(row.Content) || AnchorOf(row) is not null;
@@ -129,4 +143,7 @@ public sealed class TableBasis
         && (kind.Kind == AnchorKind.OneRepetitionMax) == (test.Exercise is not null)
             ? new Anchor(person, row.Date, kind.Kind, value, AnchorSource.Measured, test.Exercise, Machine: test.Machine)
             : null;
+
+    /// <param name="First">Holds for dates from this one on.</param>
+    private sealed record PersonAnchors(LocalDate First, IReadOnlyList<ObservedAnchor> Observed, AnchorBook Book);
 }

@@ -13,7 +13,7 @@ internal static class TestRows
     /// <summary>Of some dates, both ends included, as the store has them.</summary>
     public static IReadOnlyList<DatedTest> Of(StoreSession session, TableBasis basis, Person person, LocalDate from, LocalDate to)
     {
-        var anchors = new Lazy<AnchorBook>(() => basis.AnchorsOf(person));
+        var anchors = new Lazy<AnchorBook>(() => basis.AnchorsOf(person, from));
         return
         [
             .. session.TableRows.OfPerson(person.Id, RowKind.Tests, from, to).Select(row => new DatedTest(row.Date, (TestRow)row.Content)

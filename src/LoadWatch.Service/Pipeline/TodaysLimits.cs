@@ -30,10 +30,10 @@ public sealed class TodaysLimits(WorkingConfiguration configuration, TableBasis 
 
     private (IReadOnlyList<Day> Days, ReferenceChanges Changes) Before(StoreSession session, Person person, LocalDate date)
     {
-        var periods = ReferencePeriods.Of(person, configuration.GroupOf(person), basis.AnchorsOf(person));
+        var periods = ReferencePeriods.Of(person, configuration.GroupOf(person), basis.AnchorsOf(person, date));
         var days = session.Days.Before(person.Id, date, First(periods, date));
         return (days, new ReferenceChanges(periods, () => new RestatedSessions(
-            person, basis.AnchorsOf(person), configuration.Computation, periods.Quantities, session.Activities.Histograms(person.Id, days[0].Date, date))));
+            person, basis.AnchorsOf(person, date), configuration.Computation, periods.Quantities, session.Activities.Histograms(person.Id, days[0].Date, date))));
     }
 
     /// <summary>The first of the days that are looked back at from a date.</summary>

@@ -1,5 +1,6 @@
 using LoadWatch.Anchors;
 using LoadWatch.People;
+using LoadWatch.Stimulus;
 using LoadWatch.Storage.Dialects;
 using NodaTime;
 
@@ -15,14 +16,22 @@ public sealed class ObservedAnchorTable
 
     private const string Delete = "DELETE FROM anchor_observed WHERE person = @person AND holds_from >= @from";
 
-    private const string Select = $"SELECT {Columns} FROM anchor_observed WHERE person = @person ORDER BY holds_from, kind, sport, exercise, machine";
+    private const string Select = $"""
+        SELECT {Columns} FROM anchor_observed WHERE person = @person AND (kind <> 'power_max' OR holds_from >= @since)
+        ORDER BY holds_from, kind, sport, exercise, machine
+        """;
 
     private readonly StoreSession session;
 
     internal ObservedAnchorTable(StoreSession session) => this.session = session;
 
     /// <summary>A person's, sorted by month.</summary>
-    public IReadOnlyList<ObservedAnchor> OfPerson(string person) => session.Rows<Row>(Select, new { person }).ConvertAll(row => row.ToAnchor());
+    /// <param name="first">
+    /// Only those that bear on dates from this one on: a maximal power is adopted month by month and counts for <see cref="PowerCapacity.RecentDays"/> after it was
+    /// shown, the others are few and count until the next. Null: all.
+    /// </param>
+    public IReadOnlyList<ObservedAnchor> OfPerson(string person, LocalDate? first = null) =>
+        session.Rows<Row>(Select, new { person, since = first?.PlusDays(-PowerCapacity.RecentDays) ?? LocalDate.MinIsoValue }).ConvertAll(row => row.ToAnchor());
 
     /// <summary>Stores a person's in place of all from a month on.</summary>
     public void Replace(string person, LocalDate from, IReadOnlyList<ObservedAnchor> anchors)

@@ -1,3 +1,5 @@
+using LoadWatch.Anchors;
+using LoadWatch.People;
 using LoadWatch.Plans;
 using LoadWatch.Recordings;
 using LoadWatch.Rows;
@@ -50,12 +52,13 @@ public sealed class DayCostTests
         Assert.Equal(0, StoredTraining.Update(workplace.Configuration, workplace.Store, Last));
     }
 
-    /// <summary>With a rating, sets, attendance and a planned session of every day beside the recordings.</summary>
+    /// <summary>With a rating, sets, attendance and a planned session of every day beside the recordings, and a maximal power from own sessions month by month.</summary>
     private static long RowsOfOneNewSession(int years)
     {
         using var folder = new WorkingFolder();
         using var workplace = Workplace.OpenToWork(folder.ConfigPath);
         Fill(workplace, years * 365, everyDay: true);
+        workplace.Store.Write(session => session.ObservedAnchors.Replace("anna", LocalDate.MinIsoValue, [.. Enumerable.Range(0, years * 12).Select(Power)]));
         StoredTraining.Update(workplace.Configuration, workplace.Store, Last);
         workplace.Store.Write(session => StoredTraining.Put(session, "anna", Last, 90));
         return StoredTraining.Update(workplace.Configuration, workplace.Store, Last);
@@ -94,6 +97,12 @@ public sealed class DayCostTests
             }
         }
     });
+
+    private static ObservedAnchor Power(int monthsAgo)
+    {
+        var month = new LocalDate(2026, 6, 1).PlusMonths(-monthsAgo);
+        return new ObservedAnchor("anna", AnchorKind.PowerMax, month, 900, 45, month.PlusDays(-1), "one second") { Sport = "cycling" };
+    }
 
     private static SetRow Set(int number) => new(1, null, "leg press", null, number, 10, 100, null, 2, null, null, SetLoad.Weight, false, false);
 }

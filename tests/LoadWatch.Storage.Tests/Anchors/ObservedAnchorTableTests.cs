@@ -27,6 +27,19 @@ public sealed class ObservedAnchorTableTests(SharedFolder shared) : StoreTest(sh
     }
 
     [Fact]
+    public void OfMaximalPowersOnlyThoseAreReadThatCanStillCount()
+    {
+        ObservedAnchor[] months = [.. Enumerable.Range(0, 24).Select(ago => Shown(June.PlusMonths(-ago))).Reverse()];
+        Store.Write(session => session.ObservedAnchors.Replace("anna", June.PlusYears(-3), [Power with { From = June.PlusYears(-3) }, .. months]));
+
+        Assert.Equal(25, Of("anna").Count);
+        var read = Store.Read(session => session.ObservedAnchors.OfPerson("anna", June));
+
+        Assert.Equal(AnchorKind.CriticalPower, read[0].Kind);
+        Assert.Equal(months.Where(one => one.ShownOn >= June.PlusDays(-183)), read.Skip(1));
+    }
+
+    [Fact]
     public void ThoseOfEarlierMonthsStay()
     {
         Store.Write(session => session.ObservedAnchors.Replace("anna", June, [Power, Press]));
@@ -68,6 +81,9 @@ public sealed class ObservedAnchorTableTests(SharedFolder shared) : StoreTest(sh
         Assert.Throws<InvalidDataException>(() => BestMeansCodec.Read([1, 2, 3]));
         Assert.Throws<InvalidDataException>(() => BestMeansCodec.Read([0, 0, 0, 0, 0, 0, 0xF0, 0x7F]));
     }
+
+    /// <summary>On the last day before the month from which it holds.</summary>
+    private static ObservedAnchor Shown(LocalDate month) => new("anna", AnchorKind.PowerMax, month, 900, 45, month.PlusDays(-1), "one second") { Sport = "cycling" };
 
     private IReadOnlyList<ObservedAnchor> Of(string person) => Store.Read(session => session.ObservedAnchors.OfPerson(person));
 }
