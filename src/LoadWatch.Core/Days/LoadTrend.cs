@@ -14,10 +14,10 @@ namespace LoadWatch.Days;
 /// <param name="firstCovered">The first date with known load, where that is known already.</param>
 internal sealed class LoadTrend(LoadDeviation deviation, LocalDate? firstCovered = null)
 {
-    private const int KnownOf7 = 5;
-    private const int KnownOf21 = 17;
-    private const int KnownOf28 = 22;
-    private const int MedianDays = 365;
+    internal const int KnownOf7 = 5;
+    internal const int KnownOf21 = 17;
+    internal const int KnownOf28 = 22;
+    internal const int MedianDays = 365;
 
     private readonly List<double?> loads = [];
     private readonly List<double?> chronics = [];

@@ -8,8 +8,8 @@ namespace LoadWatch.Days;
 /// </summary>
 internal sealed class StimulusTrend(BodyRegion region)
 {
-    private const int UsualDays = 365;
-    private const int GapsWanted = 4;
+    internal const int UsualDays = 365;
+    internal const int GapsWanted = 4;
 
     /// <summary>Share of the days behind the usual number that must be known. A choice, as that of the rule at its default.</summary>
     private const double KnownShare = 0.7;

@@ -7,12 +7,12 @@ namespace LoadWatch.Days;
 internal sealed class WeekTrend
 {
     private const int WeekDays = 7;
-    private const int KnownOf7 = 5;
+    internal const int KnownOf7 = 5;
 
     /// <summary>The usual rests on so many weeks, at the most and at the least, out of those looked back at. A choice.</summary>
-    private const int UsualWeeks = 8;
-    private const int WeeksWanted = 6;
-    private const int LookBackWeeks = 16;
+    internal const int UsualWeeks = 8;
+    internal const int WeeksWanted = 6;
+    internal const int LookBackWeeks = 16;
 
     /// <summary>Of each date the 7 days that end with it.</summary>
     private readonly List<PastWeek> weeks = [];

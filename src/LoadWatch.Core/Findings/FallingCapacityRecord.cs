@@ -1,3 +1,5 @@
+using LoadWatch.Anchors;
+
 namespace LoadWatch.Findings;
 
 /// <summary>Why the rule <see cref="FallingCapacityRule"/> may ask for attention, and its words.</summary>
@@ -5,7 +7,7 @@ internal sealed class FallingCapacityRecord : RuleRecord
 {
     public override string Says => "a best of late below the best before";
 
-    public override string Cause => "No all-out try lately, less heavy or fast work, fatigue, another device or machine.";
+    public override string Cause => "No all-out try lately, less heavy or fast work, much training in the days before, another device or machine.";
 
     public override string Consequence => "Limits and loads that rest on the old best say less.";
 
@@ -20,6 +22,9 @@ internal sealed class FallingCapacityRecord : RuleRecord
 
     public override string Basis =>
         "Stretches and errors of speed and power are a choice; the error of an estimated maximum is 10.6 to 13.5 % of the mean in direct tests; critical power and speed: Monod and Scherrer 1965, Moritani et al. 1981, with standard errors of the line.";
+
+    public override string Fixed =>
+        FormattableString.Invariant($"Two stretches of critical power or speed are compared where their shortest and longest bests differ by a factor of {CriticalFall.AlikeSpan:0.#} at most, heart rate was not lower by more than {CriticalFall.HeartRateWithinBpm:0.#} bpm, and the later value reaches {AnchorContradiction.ReachWanted:0.##} of the one before.");
 
     public override int Rank => 8;
 

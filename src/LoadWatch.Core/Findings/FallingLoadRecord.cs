@@ -20,6 +20,9 @@ internal sealed class FallingLoadRecord : RuleRecord
     public override string Basis =>
         "Spiering, Mujika, Sharp and Foulis 2021, J Strength Cond Res 35:1449-1458, for about a third; the other limits are a choice, the notice and its delay fitted by simulation.";
 
+    public override string Fixed =>
+        $"In each of the weeks before {FallingLoadRule.KnownOf7} days are known; the last days are looked for within twice as many.";
+
     public override int Rank => 7;
 
     public override string Counted(FindingKey key) => $"well below their usual{KeyWords.Measure(key)}";

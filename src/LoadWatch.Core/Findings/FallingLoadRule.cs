@@ -16,7 +16,8 @@ namespace LoadWatch.Findings;
 /// </summary>
 public sealed class FallingLoadRule : IRule
 {
-    private const int KnownOf7 = 5;
+    /// <summary>Days with known load wanted in each of the weeks before. A choice.</summary>
+    internal const int KnownOf7 = 5;
 
     public string Name => "falling_load";
 

@@ -1,3 +1,5 @@
+using LoadWatch.Days;
+
 namespace LoadWatch.Findings;
 
 /// <summary>Why the rule <see cref="LoadRatioRule"/> may ask for attention, and its words.</summary>
@@ -19,6 +21,10 @@ internal sealed class LoadRatioRecord : RuleRecord
 
     public override string Basis =>
         "Windt and Gabbett 2018, Br J Sports Med 53:988-990, for the uncoupled ratio; that it is watched and its coverage are a choice; limit, return value and delay were fitted by simulation. It describes change, nothing else.";
+
+    public override string Fixed =>
+        $"The ratio is read with {LoadTrend.KnownOf7} known days of the last 7 and {LoadTrend.KnownOf21} of the 21 before; the median of the 28-day load is that of the last {LoadTrend.MedianDays} days; "
+            + $"the usual week is the median of the {WeekTrend.UsualWeeks} newest ordinary weeks of {WeekTrend.LookBackWeeks}, with {WeekTrend.WeeksWanted} wanted and {WeekTrend.KnownOf7} days known in each.";
 
     public override int Rank => 0;
 

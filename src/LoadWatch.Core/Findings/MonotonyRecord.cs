@@ -20,6 +20,9 @@ internal sealed class MonotonyRecord : RuleRecord
     public override string Basis =>
         "Foster 1998, Med Sci Sports Exerc 30:1164-1168, for monotony and strain; the limit of monotony is a convention, the others a choice.";
 
+    public override string Fixed =>
+        "Monotony and strain are read over 7 days, all of them known.";
+
     public override int Rank => 9;
 
     public override string Counted(FindingKey key) => "in a week above the usual with little variation";

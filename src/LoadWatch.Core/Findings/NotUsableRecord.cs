@@ -20,6 +20,8 @@ internal sealed class NotUsableRecord : RuleRecord
     public override string Basis =>
         "A choice; the number of sessions was fitted by simulation.";
 
+    public override bool IsOfTraining => false;
+
     public override int Rank => 10;
 
     public override string Counted(FindingKey key) => "with recordings that cannot be used";

@@ -8,13 +8,13 @@ namespace LoadWatch.Findings;
 internal sealed class PlannedSessions(SilenceLimits limits, MissedSessions? before)
 {
     /// <summary>A plan that has expected nothing for so long says nothing about silence any more. Days.</summary>
-    private const int WatchedDays = 28;
+    internal const int WatchedDays = 28;
 
     /// <summary>Of more than these only the number is kept: a season without any recording is told by its first ones.</summary>
     private const int Told = 20;
 
     /// <summary>A plan that told fewer of the recent sessions than this says little of when the next is to come: then the person's own rhythm does. A choice. Share.</summary>
-    private const double ToldShare = 0.7;
+    internal const double ToldShare = 0.7;
 
     private readonly List<LocalDate> expected = [];
     private readonly List<(LocalDate Date, bool Told)> recorded = [];

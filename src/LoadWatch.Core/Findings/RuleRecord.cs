@@ -33,9 +33,15 @@ public abstract class RuleRecord
     /// <summary>Authors, year, title; or <c>a choice</c>.</summary>
     public abstract string Basis { get; }
 
+    /// <summary>Numbers that take part and are no limits: nobody needs to tune them, but a reader may ask. All a choice.</summary>
+    public virtual string Fixed => "nothing";
+
     /// <summary>Which reasons are named first where a brief cannot name everybody; less is graver, each once. A choice.</summary>
     [JsonIgnore]
     public abstract int Rank { get; }
+
+    /// <summary>Whether it is about what somebody trained; else about what came in, or about tests.</summary>
+    public virtual bool IsOfTraining => !IsOfHealth;
 
     /// <summary>Told to clinicians and to the person only.</summary>
     public virtual bool IsOfHealth => false;
@@ -63,6 +69,7 @@ public abstract class RuleRecord
         ("ends", Ends),
         ("data needed", DataNeeded),
         ("basis", Basis),
+        ("fixed", Fixed),
     ];
 
     /// <summary>Names of the fields that say nothing; a rule with any cannot be registered.</summary>

@@ -20,6 +20,11 @@ internal sealed class SilenceRecord : RuleRecord
     public override string Basis =>
         "A choice; missed sessions and extra days were fitted by simulation.";
 
+    public override string Fixed =>
+        FormattableString.Invariant($"A plan is gone by where it expected enough sessions in the last {PlannedSessions.WatchedDays} days and told {PlannedSessions.ToldShare:0.##} of the recordings that came; else the rhythm of the recordings is.");
+
+    public override bool IsOfTraining => false;
+
     public override int Rank => 3;
 
     public override string Counted(FindingKey key) => "silent";

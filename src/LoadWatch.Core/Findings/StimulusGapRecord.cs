@@ -1,3 +1,5 @@
+using LoadWatch.Days;
+
 namespace LoadWatch.Findings;
 
 /// <summary>Why the rule <see cref="StimulusGapRule"/> may ask for attention, and its words.</summary>
@@ -19,6 +21,9 @@ internal sealed class StimulusGapRecord : RuleRecord
 
     public override string Basis =>
         "Every number is a choice, the days to a notice fitted by simulation; what counts as heavy or fast rests on the size principle (recruitment thresholds, DEVELOPERS.md).";
+
+    public override string Fixed =>
+        $"The usual gap is the median of the gaps of the last {StimulusTrend.UsualDays} days, with {StimulusTrend.GapsWanted} wanted.";
 
     public override int Rank => 2;
 

@@ -1,3 +1,5 @@
+using LoadWatch.Days;
+
 namespace LoadWatch.Findings;
 
 /// <summary>Why the rule <see cref="StimulusLowRule"/> may ask for attention, and its words.</summary>
@@ -19,6 +21,9 @@ internal sealed class StimulusLowRecord : RuleRecord
 
     public override string Basis =>
         "A choice, share and floor from 60 on fitted by simulation. Guidelines ask for muscle strengthening on 2 or more days a week (WHO 2020, Bull et al., Br J Sports Med 54:1451-1462): under 2 in 14 days is less than half of that.";
+
+    public override string Fixed =>
+        $"Heavy-or-fast days are counted over {HeavyTally.WindowDays} days, and the usual number is that of the {HeavyTally.UsualDays} days before.";
 
     public override int Rank => 11;
 

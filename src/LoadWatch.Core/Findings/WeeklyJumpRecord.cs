@@ -20,6 +20,9 @@ internal sealed class WeeklyJumpRecord : RuleRecord
     public override string Basis =>
         "That weekly changes are kept small is advice of Soligard et al. 2016, Br J Sports Med 50:1030-1041 (from memory; the evidence is weak). Every number is a choice; raise, return, the factors of the usual and the delays were fitted by simulation.";
 
+    public override string Fixed =>
+        $"A plan counts where it expected a recording in this week or one of the {WeeklyJumpRule.PlanWeeks} before; without a plan {WeeklyJumpRule.FullWeeksWanted} weeks with as many training days are wanted, or where there are fewer, those with the most.";
+
     public override int Rank => 4;
 
     public override string Counted(FindingKey key) => $"with a week far above the last{KeyWords.By(key)}";

@@ -20,10 +20,10 @@ public sealed class WeeklyJumpRule : IRule
     private const int WeekDays = 7;
 
     /// <summary>A plan that has expected nothing in this week and the weeks before it tells of no missing session. Weeks.</summary>
-    private const int PlanWeeks = 4;
+    internal const int PlanWeeks = 4;
 
     /// <summary>Fewest full weeks to compare with where there is no plan. A choice. Count.</summary>
-    private const int FullWeeksWanted = 4;
+    internal const int FullWeeksWanted = 4;
 
     public string Name => "weekly_jump";
 

@@ -12,9 +12,9 @@ internal static class CommonSilence
     private const string Rule = "silence";
 
     /// <summary>So many of a group, and half of it, are no coincidence. A choice.</summary>
-    private const int Fewest = 5;
+    internal const int Fewest = 5;
 
-    private const int WithinDays = 3;
+    internal const int WithinDays = 3;
 
     /// <summary>The people whose silence is told in common, group by group: many at once, and whoever's inbox is away, which explains it.</summary>
     public static IReadOnlyList<BriefSubject> Of(IReadOnlyList<BriefSubject> shown) =>

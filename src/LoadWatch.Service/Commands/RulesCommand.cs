@@ -2,6 +2,7 @@ using System.CommandLine;
 using System.Text.Json;
 using System.Text.Json.Nodes;
 using LoadWatch.Findings;
+using LoadWatch.Notices;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
 using Spectre.Console;
@@ -44,6 +45,7 @@ public static class RulesCommand
                 ["whose"] = whose,
                 ["rules"] = new JsonArray([.. RuleBook.All.Select(rule => Line(rule, limits))]),
                 ["mutes"] = new JsonArray([.. RuleMutes.All.Select(mute => new JsonObject { ["by"] = mute.By, ["rules"] = List(mute.Rules), ["how"] = mute.How })]),
+                ["fixed"] = List(FixedNumbers.All),
             }));
         }
         else
@@ -102,6 +104,14 @@ public static class RulesCommand
         }
 
         TableOutput.Write(table);
+        Console.Out.WriteLine();
+        Console.Out.WriteLine("Fixed for all of them:");
+        foreach (var sentence in FixedNumbers.All)
+        {
+            Console.Out.WriteLine($"  {sentence}");
+        }
+
+        Console.Out.WriteLine();
         Console.Out.WriteLine("Rules describe change and stimulus, nothing else. Keys, units and ranges of the limits: config/README.md.");
     }
 

@@ -1,5 +1,6 @@
 using System.Text.Json;
 using LoadWatch.Findings;
+using LoadWatch.Notices;
 using LoadWatch.Service.Tests.Configuration;
 using LoadWatch.Service.Tests.Pipeline;
 
@@ -33,6 +34,8 @@ public sealed class RulesCommandTests : IDisposable
         Assert.Contains("regions [\"legs\"]", printed, StringComparison.Ordinal);
         Assert.Contains("What mutes what:", printed, StringComparison.Ordinal);
         Assert.All(RuleMutes.All, mute => Assert.Contains(mute.How, printed, StringComparison.Ordinal));
+        Assert.All(FixedNumbers.All, sentence => Assert.Contains(sentence, printed, StringComparison.Ordinal));
+        Assert.Contains("told 0.7 of the recordings that came", printed, StringComparison.Ordinal);
         Assert.DoesNotContain(" \n", printed, StringComparison.Ordinal);
     }
 
@@ -51,7 +54,7 @@ public sealed class RulesCommandTests : IDisposable
         Assert.Equal((silence, monotony), (IsOn("silence"), IsOn("monotony")));
         Assert.Equal(
             [
-                "rule", "says", "of_health", "cause", "consequence", "response", "time_to_respond", "who_decides", "ends", "data_needed", "basis", "muted_by", "limits", "limits_hash",
+                "rule", "says", "of_health", "cause", "consequence", "response", "time_to_respond", "who_decides", "ends", "data_needed", "basis", "fixed", "muted_by", "limits", "limits_hash",
             ],
             rules["silence"].EnumerateObject().Select(property => property.Name));
 
