@@ -49,6 +49,12 @@ public class LimitEvidenceTests
         Assert.DoesNotContain(moved, limits => People.Any(person => Shows(new Forgetful(), number, Limits, limits, person)));
     }
 
+    /// <summary>A finding of every kind that there is.</summary>
+    internal static IEnumerable<Finding> Some() => RuleBook.All.SelectMany(rule => People.SelectMany(person => rule.Evaluate(person(Limits)).DistinctBy(finding => (finding.Rule, finding.Severity, finding.Quantity))));
+
+    [Fact]
+    public void EveryRuleFindsSomethingInSomebody() => Assert.Equal(RuleBook.All.Select(rule => rule.Name).Order(StringComparer.Ordinal), Some().Select(finding => finding.Rule).Distinct().Order(StringComparer.Ordinal));
+
     /// <summary>Whether a finding of the same date shows both values under one name.</summary>
     private static bool Shows(IRule rule, PropertyInfo number, RuleLimits limits, RuleLimits moved, Func<RuleLimits, RuleSubject> person)
     {

@@ -30,20 +30,11 @@ public sealed class RuleTextsTests
             RuleBook.All.Select(rule => rule.Name).Append("some_new_rule").Select(RuleTexts.Order));
 
     /// <summary>I-13.</summary>
-    [Theory]
-    [InlineData("risk")]
-    [InlineData("injur")]
-    [InlineData("readiness")]
-    [InlineData("debt")]
-    [InlineData("safe")]
-    [InlineData("danger")]
-    [InlineData("must")]
-    public void WordsDescribeChangeOnly(string word) => Assert.All(
+    [Fact]
+    public void WordsDescribeChangeOnly() => Assert.All(
         RuleBook.All.SelectMany(rule => new[] { Key(rule.Name), Key(rule.Name, "distance") }),
-        key => Assert.DoesNotContain(
-            word,
-            string.Join(' ', RuleTexts.Counted(key), RuleTexts.Named(key, self: true), RuleTexts.Consider(key, self: true), RuleTexts.Consider(key, self: false), Returned(key)),
-            StringComparison.OrdinalIgnoreCase));
+        key => PlainWords.Hold(
+            string.Join(' ', RuleTexts.Counted(key), RuleTexts.Named(key, self: true), RuleTexts.Consider(key, self: true), RuleTexts.Consider(key, self: false), Returned(key))));
 
     [Theory]
     [InlineData("load_ratio", "distance", "well above their usual distance", "distance well above the usual", "distance is back within 1.6 times the usual week")]

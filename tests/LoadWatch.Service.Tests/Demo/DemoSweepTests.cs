@@ -1,11 +1,14 @@
 using LoadWatch.Activities;
 using LoadWatch.Alerts;
+using LoadWatch.Findings;
 using LoadWatch.Recordings;
 using LoadWatch.Rows;
 using LoadWatch.Service.Commands;
 using LoadWatch.Service.Demo;
+using LoadWatch.Service.Explain;
 using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage.Decisions;
+using LoadWatch.Tests;
 using NodaTime;
 
 namespace LoadWatch.Service.Tests.Demo;
@@ -43,6 +46,7 @@ public sealed class DemoSweepTests : IDisposable
         AssertAnswers(workplace);
         AssertOwners(workplace);
         AssertPages(workplace);
+        AssertExplained(workplace);
     }
 
     private static void Sweep(Workplace workplace, LocalDate morning)
@@ -108,6 +112,19 @@ public sealed class DemoSweepTests : IDisposable
         Assert.Contains("Grip strength", Page("clinic"), StringComparison.Ordinal);
         Assert.DoesNotContain("Grip strength", Page("physio"), StringComparison.Ordinal);
         Assert.Equal(4, workplace.Configuration.Contacts.Count);
+    }
+
+    /// <summary>I-13: of everybody the last day, every rule, every alert with its history and the last sessions.</summary>
+    private static void AssertExplained(Workplace workplace)
+    {
+        var told = workplace.Store.Read(session => Cast.SelectMany(part => new[] { DayExplanation.Of(workplace.Configuration, session, part.Id, date: null) }
+            .Concat(RuleBook.All.Select(rule => FindingExplanation.Of(workplace.Configuration, session, part.Id, rule.Name, date: null)))
+            .Concat(session.Alerts.All(part.Id).Select(alert => AlertExplanation.Of(session, alert.Id)))
+            .Concat(session.Activities.OfPerson(part.Id).TakeLast(3).Select(activity => SessionExplanation.Of(workplace.Configuration, session, activity.Key)))
+            .OfType<string>()).ToList());
+
+        Assert.True(told.Count > 10 * Cast.Length);
+        Assert.All(told, PlainWords.Hold);
     }
 
     private string Page(string contact) => File.ReadAllText(Path.Combine(root.FullName, "pages", $"{contact}.html"));
