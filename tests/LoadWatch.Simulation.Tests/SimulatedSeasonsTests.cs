@@ -24,12 +24,12 @@ public class SimulatedSeasonsTests
     {
         Assert.InRange(Score.FalsePerPersonAnd100Days(Usual.Value), 0, 1);
         Assert.InRange(Score.Rows(Usual.Value).Average(), 0, 2);
-        Assert.Equal(0, Score.Chatter(Usual.Value));
+        Assert.Equal(0, Score.Wavering(Usual.Value));
     }
 
     /// <summary>
-    /// Over several seeds, since a few dozen people of one may be lucky. Runners have no plan, so nothing tells their rest from a session that left no recording: over
-    /// ten seeds of 40 they are at the bound (tests/README.md), and small groups scatter about it.
+    /// Over several seeds, since a few dozen people of one may be lucky. An alert that grows graver counts as another. Runners have no plan, so nothing tells their rest from a session
+    /// that left no recording: over ten seeds of 40 they are at one and not below it (tests/README.md), so here they are held to 1.25.
     /// </summary>
     [Theory]
     [InlineData("squad", 1)]
@@ -41,16 +41,34 @@ public class SimulatedSeasonsTests
         var seasons = Enumerable.Range(2, 5).Select(seed => Season.Of(Maker(habits, seed).Healthy(16, 56), habits.Sport)).ToList();
 
         Assert.InRange(seasons.Average(Score.FalsePerPersonAnd100Days), 0, bound);
-        Assert.All(seasons, season => Assert.Equal(0, Score.Chatter(season)));
+        Assert.All(seasons, season => Assert.Equal(0, Score.Wavering(season)));
     }
 
-    [Fact]
-    public void NineOfTenEpisodesAreFound()
+    /// <summary>
+    /// Each kind by itself, over several seeds: one that is missed may not hide behind three that are found. Fails where so few, or fewer, would be found once in a hundred times if nine
+    /// of ten were: under 24 of 32. In a clinic a doubled week is no episode, since the rules that would tell it are off there (tests/README.md).
+    /// </summary>
+    [Theory]
+    [InlineData("squad", 4)]
+    [InlineData("runners", 4)]
+    [InlineData("clinic", 3)]
+    public void NineOfTenEpisodesOfEachKindAreFound(string group, int kinds)
     {
-        var found = new[] { Habits.Squad, Habits.Clinic }.SelectMany(habits => Score.Episodes(Season.Of(Maker(habits).WithEpisodes(40, 84), habits.Sport))).ToList();
+        var habits = Of(group);
+        var found = Score.Episodes([.. Enumerable.Range(1, 4).Select(seed => Season.Of(Maker(habits, seed).WithEpisodes(32, 84), habits.Sport))]);
 
-        Assert.True(found.Sum(kind => kind.Times) >= 0.9 * found.Sum(kind => kind.Episodes), string.Join(", ", found));
+        Assert.Equal(kinds, found.Count);
+        Assert.All(found, kind => Assert.True(kind.ChanceOfSoFew(0.9) > 0.01, kind.ToString()));
     }
+
+    /// <summary>By hand: of 2 at 0.9 none is found with 0.01, at most one with 0.19; of 32 at most 24 with 0.0115, at most 23 with 0.0033 (binomial tables).</summary>
+    [Theory]
+    [InlineData(2, 0, 0.01)]
+    [InlineData(2, 1, 0.19)]
+    [InlineData(2, 2, 1)]
+    [InlineData(1, 0, 0.1)]
+    public void TheMarginIsThatOfTheBinomial(int episodes, int times, double chance) =>
+        Assert.Equal(chance, new Found(HappeningKind.Fade, episodes, times, null).ChanceOfSoFew(0.9), 9);
 
     /// <summary>I-4, I-5, I-14.</summary>
     [Fact]
@@ -92,7 +110,7 @@ public class SimulatedSeasonsTests
     [Fact]
     public void WithoutDeadbandAndDelaysChatterRises()
     {
-        int Chatter(RuleLimits limits) => Score.Chatter(Season.Of(new WorldMaker(Seed, Habits.Squad, new Noise(), limits).Healthy(30, 84), Habits.Squad.Sport));
+        int Chatter(RuleLimits limits) => Score.Wavering(Season.Of(new WorldMaker(Seed, Habits.Squad, new Noise(), limits).Healthy(30, 84), Habits.Squad.Sport));
 
         Assert.True(Chatter(Limits.WithoutDeadband(Limits.Before(Habits.Squad))) > Chatter(Limits.Before(Habits.Squad)));
         Assert.True(Chatter(Limits.WithoutDeadband(Limits.BuiltIn(Habits.Squad))) > Chatter(Limits.BuiltIn(Habits.Squad)));

@@ -31,7 +31,7 @@ public sealed class Report(IReadOnlyList<int> seeds, int people, int days, bool 
                 Number(seasons.Average(Score.FalsePerPersonAnd100Days)),
                 Number(seasons.Max(Score.FalsePerPersonAnd100Days)),
                 OfThem(seasons),
-                Count(seasons.Sum(Score.Chatter)),
+                Count(seasons.Sum(Score.Wavering)),
                 Number(rows.Average()),
                 Count(rows[(int)(0.95 * (rows.Count - 1))]));
         }
@@ -112,7 +112,7 @@ public sealed class Report(IReadOnlyList<int> seeds, int people, int days, bool 
     private void Disturbed(string name, string set, RuleLimits limits, Noise noise)
     {
         var seasons = Seasons(seed => new WorldMaker(seed, Habits.Squad, noise, limits).Healthy(people, days), Habits.Squad);
-        Row(name, set, Number(seasons.Average(Score.FalsePerPersonAnd100Days)), OfThem(seasons), Count(seasons.Sum(Score.Chatter)));
+        Row(name, set, Number(seasons.Average(Score.FalsePerPersonAnd100Days)), OfThem(seasons), Count(seasons.Sum(Score.Wavering)));
     }
 
     private string OfThem(List<SeasonResult> seasons) => string.Join(", ", seasons.SelectMany(Score.FalseAlerts)

@@ -44,6 +44,21 @@ public sealed record PersonReplay(string Person, IReadOnlyList<AlertChange> Chan
         }
     }
 
+    /// <summary>What was really told, as it is stored: with late files, answers, and the limits of each day.</summary>
+    /// <param name="alerts">All of the person.</param>
+    /// <param name="changes">Of these, in order.</param>
+    /// <param name="last">The last date.</param>
+    public static PersonReplay Stored(string person, IReadOnlyList<Alert> alerts, IReadOnlyList<AlertChange> changes, LocalDate last)
+    {
+        var past = changes.Where(change => change.Date <= last).ToList();
+        var states = past.GroupBy(change => change.AlertId, StringComparer.Ordinal).ToDictionary(alert => alert.Key, alert => alert.Last().To, StringComparer.Ordinal);
+        return new(
+            person,
+            past,
+            [.. alerts.Where(alert => states.TryGetValue(alert.Id, out var state) && AlertLife.IsActive(state)).OrderBy(alert => alert.Id, StringComparer.Ordinal)],
+            alerts.ToDictionary(alert => alert.Id, alert => alert.Key, StringComparer.Ordinal));
+    }
+
     /// <summary>How often something was raised from a date on.</summary>
     public IEnumerable<AlertChange> Raised(LocalDate from, LocalDate to) =>
         Changes.Where(change => change.Reason is AlertChangeReason.Raised or AlertChangeReason.RaisedAgain && change.Date >= from && change.Date <= to);

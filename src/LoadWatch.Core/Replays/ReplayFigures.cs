@@ -1,5 +1,4 @@
-// What a set of limits would have asked of those who are told. Chatter after ANSI/ISA-18.2, where it is three cycles in a minute; here three changes between active
-// and over in 7 days: a choice. Standing: active for longer than 14 days, a choice.
+// What a set of limits would have asked of those who are told. Standing: active for longer than 14 days, a choice.
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
 using LoadWatch.Notices;
@@ -12,19 +11,18 @@ namespace LoadWatch.Replays;
 /// <param name="Days">Dates looked at.</param>
 /// <param name="Raised">By rule, then severity, in the order of the rules.</param>
 /// <param name="Contacts">In their order.</param>
-/// <param name="Chatter">Runs of three changes within 7 days of what one alert is about.</param>
+/// <param name="Wavering">Runs of three changes within 7 days of what one alert is about (<see cref="Chatter"/>).</param>
+/// <param name="Corrected">Alerts that a later file undid: none in a replay, which knows every file from its day on.</param>
 /// <param name="Standing">Alerts that stand on the last date.</param>
 /// <param name="StandingLong">Those of them raised more than 14 days before it.</param>
 /// <param name="Leads">One for each mark.</param>
 public sealed record ReplayFigures(
-    int Days, IReadOnlyList<RaisedByRule> Raised, IReadOnlyList<RaisedForContact> Contacts, int Chatter, int Standing, int StandingLong, IReadOnlyList<Lead> Leads)
+    int Days, IReadOnlyList<RaisedByRule> Raised, IReadOnlyList<RaisedForContact> Contacts, int Wavering, int Corrected, int Standing, int StandingLong, IReadOnlyList<Lead> Leads)
 {
     /// <summary>An alert counts as ahead of a mark for so long.</summary>
     public const int LeadDays = 28;
 
     private const int StandingDays = 14;
-    private const int ChatterDays = 7;
-    private const int ChatterChanges = 3;
 
     /// <param name="people">By other limits or by today's.</param>
     /// <param name="contacts">With the ids of the people whom each is told about.</param>
@@ -42,10 +40,11 @@ public sealed record ReplayFigures(
                 .ThenBy(group => group.Key.Severity)
                 .Select(group => new RaisedByRule(group.Key.Rule, group.Key.Severity, group.Count()))],
             [.. contacts.Select(one => ForContact(one.Contact, one.People, people, from, to))],
-            people.Sum(person => Chatters(person, from, to)),
+            people.Sum(person => Chatter.Of(person.Changes.Where(change => change.Date >= from && change.Date <= to), id => person.Keys[id])),
+            people.Sum(person => person.Changes.Count(change => change.Reason == AlertChangeReason.Corrected && change.Date >= from && change.Date <= to)),
             standing.Count,
             standing.Count(alert => alert.Raised < to.PlusDays(-StandingDays)),
-            [.. marks.Select(mark => new Lead(mark, Before(mark, people)))]);
+            [.. marks.Select(mark => Before(mark, people))]);
     }
 
     private static RaisedForContact ForContact(Contact contact, IReadOnlySet<string> told, IReadOnlyList<PersonReplay> people, LocalDate from, LocalDate to)
@@ -60,20 +59,15 @@ public sealed record ReplayFigures(
         return new RaisedForContact(contact.Id, told.Count, dates.Sum(), (double)dates.Sum() / (Period.DaysBetween(from, to) + 1), dates.DefaultIfEmpty(0).Max());
     }
 
-    private static int Chatters(PersonReplay person, LocalDate from, LocalDate to) => person.Changes
-        .Where(change => change.Date >= from && change.Date <= to && AlertLife.IsActive(change.From) != AlertLife.IsActive(change.To))
-        .GroupBy(change => person.Keys[change.AlertId])
-        .Sum(key => Crowded([.. key.Select(change => change.Date)]));
-
-    private static int Crowded(List<LocalDate> changes) =>
-        Enumerable.Range(0, Math.Max(0, changes.Count - ChatterChanges + 1)).Count(at => Period.DaysBetween(changes[at], changes[at + ChatterChanges - 1]) < ChatterDays);
-
-    /// <summary>Days from the first alert of the stretch before the mark to it.</summary>
-    private static int? Before(Mark mark, IReadOnlyList<PersonReplay> people) => people
+    /// <summary>The first alert of the stretch before the mark.</summary>
+    private static Lead Before(Mark mark, IReadOnlyList<PersonReplay> people) => people
         .Where(person => string.Equals(person.Person, mark.Person, StringComparison.OrdinalIgnoreCase))
-        .SelectMany(person => person.Raised(mark.Date.PlusDays(-LeadDays), mark.Date.PlusDays(-1)))
-        .Select(change => (int?)Period.DaysBetween(change.Date, mark.Date))
-        .Max();
+        .SelectMany(person => person.Raised(mark.Date.PlusDays(-LeadDays), mark.Date.PlusDays(-1)).Select(change => (change.Date, person.Keys[change.AlertId].Rule)))
+        .Where(one => RuleBook.Of(one.Rule)?.Record.IsOfTraining == true)
+        .OrderBy(one => one.Date)
+        .ThenBy(one => RuleTexts.Order(one.Rule))
+        .Select(one => new Lead(mark, Period.DaysBetween(one.Date, mark.Date), one.Rule))
+        .FirstOrDefault() ?? new Lead(mark, null, null);
 }
 
 /// <param name="Count">How often an alert of the rule was raised with this severity.</param>
@@ -88,5 +82,6 @@ public sealed record RaisedForContact(string Contact, int People, int Raised, do
 /// <summary>A date before which an alert was wanted.</summary>
 public sealed record Mark(string Person, LocalDate Date);
 
-/// <param name="Days">From the first alert of the 28 days before the mark to it; null: there was none.</param>
-public sealed record Lead(Mark Mark, int? Days);
+/// <param name="Days">From the first alert of the 28 days before the mark to it, of those about training; null: there was none.</param>
+/// <param name="Rule">By which it was raised.</param>
+public sealed record Lead(Mark Mark, int? Days, string? Rule);

@@ -61,12 +61,31 @@ public static class ReplayCommand
         var contacts = configuration.Contacts
             .Select(contact => (contact, (IReadOnlySet<string>)configuration.PeopleOf(contact).Select(person => person.Id).ToHashSet(StringComparer.Ordinal)))
             .ToList();
-        ReplayFigures Figures(Func<ReplayedPerson, RuleLimits> limits) => ReplayFigures.Of(
-            [.. cut.AsParallel().AsOrdered().Select(person => PersonReplay.Of(person, limits(person)))], contacts, marks, first, last);
+        var told = workplace.Store.Read(session => Told(session, configuration, last));
+        ReplayFigures By(Func<ReplayedPerson, RuleLimits> limits) => Figures([.. cut.AsParallel().AsOrdered().Select(person => PersonReplay.Of(person, limits(person)))]);
+        ReplayFigures Figures(IReadOnlyList<PersonReplay> people) => ReplayFigures.Of(people, contacts, marks, first, last);
         var comparison = new ReplayComparison(
-            first, last, Figures(past => past.Group.Limits), Figures(past => others.Of(past.Person.Id, configuration.Groups[past.Group.Id], own)));
+            first,
+            last,
+            Figures(told),
+            By(person => person.Group.Limits),
+            By(person => others.Of(person.Person.Id, configuration.Groups[person.Group.Id], own)));
         Console.Out.Write(json ? comparison.Json() : comparison.Text());
         return ExitCode.Ok;
+    }
+
+    /// <summary>Changes are read at once, in the order of their commits.</summary>
+    private static IReadOnlyList<PersonReplay> Told(StoreSession session, WorkingConfiguration configuration, LocalDate last)
+    {
+        var changes = session.Alerts.Changes.Since(0).ToLookup(change => change.AlertId, StringComparer.Ordinal);
+        return
+        [
+            .. configuration.People.Keys.Order(StringComparer.Ordinal).Select(person =>
+            {
+                var alerts = session.Alerts.All(person);
+                return PersonReplay.Stored(person, alerts, [.. alerts.SelectMany(alert => changes[alert.Id]).OrderBy(change => change.Date).ThenBy(change => change.Sequence)], last);
+            }),
+        ];
     }
 
     private static ReplayedPerson Past(StoreSession session, WorkingConfiguration configuration, Person person)

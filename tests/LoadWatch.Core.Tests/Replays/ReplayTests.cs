@@ -65,8 +65,8 @@ public class ReplayTests
         Assert.Equal(30, figures.Days);
         Assert.Equal([new RaisedByRule("load_ratio", Severity.Warning, 1)], figures.Raised);
         Assert.Equal([new RaisedForContact("coach", 2, 1, 1.0 / 30, 1), new RaisedForContact("bens", 1, 0, 0, 0)], figures.Contacts);
-        Assert.Equal([5, null, null], figures.Leads.Select(lead => lead.Days));
-        Assert.Equal((0, 0, 0), (figures.Chatter, figures.Standing, figures.StandingLong));
+        Assert.Equal([(5, "load_ratio"), (null, null), (null, null)], figures.Leads.Select(lead => (lead.Days, lead.Rule)));
+        Assert.Equal((0, 0, 0), (figures.Wavering, figures.Standing, figures.StandingLong));
     }
 
     [Fact]
@@ -79,9 +79,55 @@ public class ReplayTests
             [],
             [],
             First,
-            First.PlusDays(40)).Chatter;
+            First.PlusDays(40)).Wavering;
 
         Assert.Equal([0, 1, 0, 2], [Chatter(1, 2), Chatter(1, 2, 7), Chatter(1, 2, 8), Chatter(1, 2, 3, 4)]);
+    }
+
+    [Theory]
+    [InlineData(AlertChangeReason.ReturnedToNormal, 1)]
+    [InlineData(AlertChangeReason.Corrected, 1)]
+    [InlineData(AlertChangeReason.SuppressedByPlan, 0)]
+    [InlineData(AlertChangeReason.LimitsChanged, 0)]
+    [InlineData(AlertChangeReason.RuleSwitchedOff, 0)]
+    public void WhatSomebodyEndedOtherwiseDidNotWaver(AlertChangeReason end, int count) => Assert.Equal(count, Chatter.Of(
+        [
+            Change(1, AlertState.Normal, AlertState.Unacknowledged, AlertChangeReason.Raised),
+            Change(2, AlertState.Unacknowledged, AlertState.Returned, end),
+            Change(3, AlertState.Returned, AlertState.Unacknowledged, AlertChangeReason.RaisedAgain),
+        ],
+        _ => new FindingKey("anna", "load_ratio", null)));
+
+    /// <summary>A dead strap before the mark is no lead: it tells nothing of training.</summary>
+    [Theory]
+    [InlineData("load_ratio", 9)]
+    [InlineData("stimulus_gap", 9)]
+    [InlineData("silence", null)]
+    [InlineData("not_usable", null)]
+    [InlineData("function_test", null)]
+    [InlineData("test_overdue", null)]
+    [InlineData("of_a_former_version", null)]
+    public void OnlyRulesOfTrainingAreAheadOfAMark(string rule, int? days)
+    {
+        var stored = PersonReplay.Stored("anna", [Told(rule)], [Change(1, AlertState.Normal, AlertState.Unacknowledged, AlertChangeReason.Raised) with { AlertId = Told(rule).Id }], First.PlusDays(20));
+
+        Assert.Equal(days, ReplayFigures.Of([stored], [], [new Mark("anna", First.PlusDays(10))], First, First.PlusDays(20)).Leads[0].Days);
+    }
+
+    [Fact]
+    public void WhatWasToldIsCountedAsItIsStored()
+    {
+        var alert = Told("load_ratio");
+        AlertChange[] changes =
+        [
+            Change(1, AlertState.Normal, AlertState.Unacknowledged, AlertChangeReason.Raised),
+            Change(5, AlertState.Unacknowledged, AlertState.Returned, AlertChangeReason.Corrected),
+            Change(9, AlertState.Returned, AlertState.Unacknowledged, AlertChangeReason.RaisedAgain),
+        ];
+        ReplayFigures Figures(int last) => ReplayFigures.Of(
+            [PersonReplay.Stored("anna", [alert], [.. changes.Select(change => change with { AlertId = alert.Id })], First.PlusDays(last))], [], [], First, First.PlusDays(last));
+
+        Assert.Equal([(1, 0, 1), (1, 1, 0), (2, 1, 1)], new[] { 4, 8, 20 }.Select(last => (Figures(last).Raised.Sum(one => one.Count), Figures(last).Corrected, Figures(last).Standing)));
     }
 
     [Fact]
@@ -93,6 +139,10 @@ public class ReplayTests
 
         Assert.Equal((1, 1), (figures.Standing, figures.StandingLong));
     }
+
+    private static Alert Told(string rule) => new(new FindingKey("anna", rule, null), First.PlusDays(1), First.PlusDays(1), AlertState.Unacknowledged, Severity.Notice, "");
+
+    private static AlertChange Change(int day, AlertState from, AlertState to, AlertChangeReason reason) => new("anna", day, First.PlusDays(day), from, to, reason, Severity.Notice, "", null);
 
     private static ReplayedPerson Past(Func<int, double> load, int days = 120)
     {

@@ -31,11 +31,15 @@ public sealed class ReplayCommandTests : IDisposable
         var today = root.GetProperty("today");
         Assert.Equal(("silence", 1), (today.GetProperty("raised")[0].GetProperty("rule").GetString(), today.GetProperty("raised")[0].GetProperty("count").GetInt32()));
         Assert.Equal(1, today.GetProperty("standing").GetInt32());
-        Assert.Equal(2, today.GetProperty("leads")[0].GetProperty("days").GetInt32());
+        Assert.Equal(JsonValueKind.Null, today.GetProperty("leads")[0].GetProperty("days").ValueKind);
+        Assert.Equal("silence", root.GetProperty("told").GetProperty("raised")[0].GetProperty("rule").GetString());
+        Assert.Equal(0, root.GetProperty("told").GetProperty("corrected").GetInt32());
         Assert.Empty(root.GetProperty("file").GetProperty("raised").EnumerateArray());
         Assert.Equal(JsonValueKind.Null, root.GetProperty("file").GetProperty("leads")[0].GetProperty("days").ValueKind);
         Assert.Equal(before, folder.Export("alerts") + folder.Export("findings"));
-        Assert.Contains("silence, notice", Replay(file).Output, StringComparison.Ordinal);
+        var printed = Replay(file).Output;
+        Assert.Contains("as if every recording had come on its day", printed, StringComparison.Ordinal);
+        Assert.Matches("silence, notice +1 +1 +0\n", printed);
     }
 
     /// <summary>Anna is the silent one, and her own limits say that she is watched: what a file says of all leaves that as it is, what it says of her does not.</summary>

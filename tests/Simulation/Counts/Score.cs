@@ -1,5 +1,6 @@
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
+using LoadWatch.Replays;
 using LoadWatch.Simulation.Nights;
 using LoadWatch.Simulation.Worlds;
 using NodaTime;
@@ -9,10 +10,7 @@ namespace LoadWatch.Simulation.Counts;
 /// <summary>What a season's alerts were worth, held against the truth.</summary>
 public static class Score
 {
-    private const int ChatterDays = 7;
-    private const int ChatterChanges = 3;
-
-    /// <summary>Every time within the counted days that an alert was raised, the first time or again, with nothing true to explain it.</summary>
+    /// <summary>Every time within the counted days that an alert was raised, the first time, again or as graver, with nothing true to explain it.</summary>
     public static IReadOnlyList<Raise> FalseAlerts(SeasonResult season) =>
     [
         .. season.People.SelectMany(person => Raises(person)
@@ -23,9 +21,9 @@ public static class Score
     public static double FalsePerPersonAnd100Days(SeasonResult season) =>
         100.0 * FalseAlerts(season).Count / season.People.Count / season.World.CountedDays;
 
-    /// <summary>How often an alert was raised.</summary>
+    /// <summary>How often an alert asked for a look: raised, raised again, or graver than before.</summary>
     public static IEnumerable<Raise> Raises(PersonNights person) => person.Changes
-        .Where(change => change.Reason is AlertChangeReason.Raised or AlertChangeReason.RaisedAgain)
+        .Where(change => change.Reason is AlertChangeReason.Raised or AlertChangeReason.RaisedAgain or AlertChangeReason.SeverityRose)
         .Select(change => new Raise(person.AlertOf(change.AlertId).Key, change.Date));
 
     /// <summary>By kind of episode: how many there were, how many were found, and after how many days.</summary>
@@ -42,15 +40,9 @@ public static class Score
                 Middle([.. kind.Where(pair => pair.First is not null).Select(pair => Period.DaysBetween(pair.one.From, pair.First!.Value)).Order()]))),
     ];
 
-    /// <summary>
-    /// Alerts about the same that were raised and over again three times or more, both counted, within 7 days. An alert that a planned state ended did not waver: what
-    /// was planned changed.
-    /// </summary>
-    public static int Chatter(SeasonResult season) => season.People.Sum(person => person.Changes
-        .Where(change => change.Date >= season.World.Counted && AlertLife.IsActive(change.From) != AlertLife.IsActive(change.To))
-        .Where(change => change.Reason != AlertChangeReason.SuppressedByPlan)
-        .GroupBy(change => person.AlertOf(change.AlertId).Key)
-        .Sum(key => Crowded([.. key.Select(change => change.Date)])));
+    /// <summary>Alerts about the same that were raised and over again three times or more, both counted, within 7 days.</summary>
+    public static int Wavering(SeasonResult season) => season.People.Sum(person =>
+        Chatter.Of(person.Changes.Where(change => change.Date >= season.World.Counted), id => person.AlertOf(id).Key));
 
     /// <summary>Raised dates within the counted days, by what they are about: the same where nothing but the service's own course differs.</summary>
     public static IReadOnlySet<Raise> CountedRaises(SeasonResult season) =>
@@ -87,14 +79,25 @@ public static class Score
         _ => false,
     };
 
-    private static int Crowded(List<LocalDate> changes) =>
-        Enumerable.Range(0, Math.Max(0, changes.Count - ChatterChanges + 1)).Count(at => Period.DaysBetween(changes[at], changes[at + ChatterChanges - 1]) < ChatterDays);
-
     private static int? Middle(List<int> sorted) => sorted.Count == 0 ? null : sorted[sorted.Count / 2];
 }
 
 /// <param name="MedianDays">From the first date of the episode to the date on which the alert was raised; null where none was found.</param>
-public sealed record Found(HappeningKind Kind, int Episodes, int Times, int? MedianDays);
+public sealed record Found(HappeningKind Kind, int Episodes, int Times, int? MedianDays)
+{
+    /// <summary>How likely it would be to find so few, or fewer, if a share of all such episodes were found: the binomial sum, 0 to 1.</summary>
+    public double ChanceOfSoFew(double share)
+    {
+        var (term, sum) = (Math.Pow(1 - share, Episodes), 0.0);
+        for (var times = 0; times <= Times; times++)
+        {
+            sum += term;
+            term *= share / (1 - share) * (Episodes - times) / (times + 1);
+        }
+
+        return Math.Min(1, sum);
+    }
+}
 
 /// <summary>An alert was raised on a date.</summary>
 public readonly record struct Raise(FindingKey Key, LocalDate Date);
