@@ -40,7 +40,9 @@ public static class BriefBuilder
         if (forms.Contains(BriefForm.CallList))
         {
             var room = forms.Contains(BriefForm.Daily) ? Math.Max(RowsAtMost / 2, RowsAtMost - flagged.Count) : RowsAtMost;
-            IReadOnlyList<BriefSubject> others = forms.Contains(BriefForm.Daily) ? [.. shown.ExceptBy(flagged.Select(subject => subject.Person.Id), subject => subject.Person.Id, StringComparer.Ordinal)] : shown;
+            IReadOnlyList<BriefSubject> others = forms.Contains(BriefForm.Daily)
+                ? [.. shown.ExceptBy(flagged.Select(subject => subject.Person.Id), subject => subject.Person.Id, StringComparer.Ordinal)]
+                : shown;
             brief = brief with { Calls = CallLists.Of(others, silent, date, last, room) };
             first = first with { Calls = brief.Calls };
         }
@@ -146,7 +148,12 @@ public static class BriefBuilder
     {
         var people = PeopleOf(contact, subjects);
         var view = RoleView.Of(contact.Role, people.Count);
-        return [.. people.Select(subject => subject with { Alerts = [.. subject.Alerts.Where(news => view.ShowsRule(news.Alert.Key.Rule))], Notes = [.. subject.Notes.Where(note => view.ShowsRule(note.Rule))], Suppressed = [.. subject.Suppressed.Where(finding => view.ShowsRule(finding.Rule))] })];
+        return [.. people.Select(subject => subject with
+        {
+            Alerts = [.. subject.Alerts.Where(news => view.ShowsRule(news.Alert.Key.Rule))],
+            Notes = [.. subject.Notes.Where(note => view.ShowsRule(note.Rule))],
+            Suppressed = [.. subject.Suppressed.Where(finding => view.ShowsRule(finding.Rule))],
+        })];
     }
 
     private static List<BriefSubject> PeopleOf(Contact contact, IReadOnlyList<BriefSubject> subjects) =>
@@ -165,7 +172,12 @@ public static class BriefBuilder
     /// <summary>Where there are too many for one brief, the graver reasons are named; in the order of the brief.</summary>
     private static IEnumerable<BriefSubject> Named(List<BriefSubject> flagged, int room)
     {
-        var named = flagged.OrderByDescending(Worst).ThenBy(subject => Active(subject).Min(news => RuleTexts.Rank(news.Alert.Key.Rule))).Take(room).Select(subject => subject.Person.Id).ToHashSet(StringComparer.Ordinal);
+        var named = flagged
+            .OrderByDescending(Worst)
+            .ThenBy(subject => Active(subject).Min(news => RuleTexts.Rank(news.Alert.Key.Rule)))
+            .Take(room)
+            .Select(subject => subject.Person.Id)
+            .ToHashSet(StringComparer.Ordinal);
         return flagged.Where(subject => named.Contains(subject.Person.Id));
     }
 

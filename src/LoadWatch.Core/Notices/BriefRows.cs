@@ -47,7 +47,7 @@ internal static class BriefRows
             EverHeavy(days, upTo, legs) ? legs?.DaysSince : null,
             legs?.Days28,
             [.. Enumerable.Range(1 - StripDays, StripDays).Select(offset => DayOf(days, upTo.PlusDays(offset)))],
-            Remark(subject, [.. Absent(days, upTo, view), .. RoomOf(subject, upTo, self), .. Own(subject, today, back, known, NeverHeavy(days, upTo, legs))]));
+            Remark(subject, [.. Absent(days, upTo, view), .. RoomOf(subject, upTo, self), .. Own(subject, upTo, today, back, known, NeverHeavy(days, upTo, legs))]));
     }
 
     /// <summary>A date without a day is unknown.</summary>
@@ -131,7 +131,7 @@ internal static class BriefRows
 
     private static bool IsHeldBack(AlertNews news) => news.Alert.Watch == AlertWatch.SuppressedByDesign && AlertLife.IsActive(news.Alert.State);
 
-    private static IEnumerable<string> Own(BriefSubject subject, Day? today, ReturnPhase? back, int knownOf7, int? neverHeavyDays)
+    private static IEnumerable<string> Own(BriefSubject subject, LocalDate upTo, Day? today, ReturnPhase? back, int knownOf7, int? neverHeavyDays)
     {
         if (back is not null)
         {
@@ -168,6 +168,12 @@ internal static class BriefRows
         {
             yield return "nothing recorded yet";
             yield break;
+        }
+
+        if (BriefBuilder.Active(subject).All(news => news.Alert.Key.Rule != "silence")
+            && subject.Days.LastOrDefault(day => PlannedPresence.IsNotInYet(day, upTo, subject.Group.Limits.Silence)) is { } waited)
+        {
+            yield return $"recording of {BriefNumbers.Day(waited.Date)} not in yet";
         }
 
         if (today?.Acute is null)

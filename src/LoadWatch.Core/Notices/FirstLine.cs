@@ -95,7 +95,7 @@ internal sealed record FirstLine(IReadOnlyList<BriefSubject> Shown, LocalDate? U
 
     private string? Planned() =>
         !Self && UpTo is { } last && PlannedPresence.Of(Shown, last) is { } session
-            ? $"{session.In} of {session.Expected} recordings of the session of {session.Date.ToString("d MMMM", CultureInfo.InvariantCulture)} are in."
+            ? $"{session.In} of {session.Expected} recordings of the session of {session.Date.ToString("d MMMM", CultureInfo.InvariantCulture)} are in{(session.NotYet == 0 ? "" : $", {session.NotYet} not in yet")}."
             : null;
 
     private string? SeenEarlier()

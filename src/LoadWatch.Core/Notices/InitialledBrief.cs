@@ -26,20 +26,29 @@ internal sealed class InitialledBrief
     {
         ContactName = cover.File(brief.ContactName) == brief.ContactName ? brief.ContactName : You,
         Flagged = [.. brief.Flagged.Select(Flagged)],
-        Returned = [.. brief.Returned.Select(line => line with { Subject = Subject(line.Subject), Sentence = cover.Sentence(line.Sentence) })],
-        Changed = [.. brief.Changed.Select(line => line with { Subject = Subject(line.Subject), Sentence = cover.Sentence(line.Sentence) })],
+        Returned = [.. brief.Returned.Select(Line)],
+        Changed = [.. brief.Changed.Select(Line)],
         Questions = [.. brief.Questions.Select(Question)],
-        Groups = [.. brief.Groups.Select(group => group with { Name = cover.Sentence(group.Name), Rows = [.. group.Rows.Select(Row)], NotWatched = [.. group.NotWatched.Select(cover.Sentence)] })],
+        Groups = [.. brief.Groups.Select(Group)],
         Week = brief.Week is { } week ? Week(week) : null,
         Calls = brief.Calls is { } calls ? calls with { Calls = [.. calls.Calls.Select(Call)] } : null,
         Sheets = [.. brief.Sheets.Select(sheet => new ClassSheet(cover.Sentence(sheet.Heading), [.. sheet.People.Select(Planned)]))],
         People = [],
     };
 
+    private BriefLine Line(BriefLine line) => line with { Subject = Subject(line.Subject), Sentence = cover.Sentence(line.Sentence) };
+
+    private BriefGroup Group(BriefGroup group) => group with
+    {
+        Name = cover.Sentence(group.Name),
+        Rows = [.. group.Rows.Select(Row)],
+        NotWatched = [.. group.NotWatched.Select(cover.Sentence)],
+    };
+
     private BriefWeek Week(BriefWeek week) => week with
     {
         Groups = [.. week.Groups.Select(group => group with { Name = cover.Sentence(group.Name) })],
-        Standing = [.. week.Standing.Select(line => line with { Subject = Subject(line.Subject), Sentence = cover.Sentence(line.Sentence) })],
+        Standing = [.. week.Standing.Select(Line)],
         Lost = [.. week.Lost.Select(line => line with { Subject = Subject(line.Subject) })],
     };
 

@@ -1,4 +1,5 @@
 using LoadWatch.Days;
+using LoadWatch.Findings;
 using NodaTime;
 
 namespace LoadWatch.Notices;
@@ -7,7 +8,8 @@ namespace LoadWatch.Notices;
 /// <param name="Date">The last date on which a recording was expected of somebody.</param>
 /// <param name="Expected">People of whom one was expected.</param>
 /// <param name="In">Of these, those with a recording of the date.</param>
-internal sealed record PlannedPresence(LocalDate Date, int Expected, int In)
+/// <param name="NotYet">Those whose recording may still come in by the limits of silence (<see cref="IsNotInYet"/>).</param>
+internal sealed record PlannedPresence(LocalDate Date, int Expected, int In, int NotYet)
 {
     private const int DaysBack = 3;
 
@@ -15,15 +17,19 @@ internal sealed record PlannedPresence(LocalDate Date, int Expected, int In)
     public static PlannedPresence? Of(IReadOnlyList<BriefSubject> shown, LocalDate upTo)
     {
         var expected = shown
-            .SelectMany(subject => subject.Days.TakeLast(DaysBack))
-            .Where(day => day.Plan.Expected > 0 && day.Date > upTo.PlusDays(-DaysBack) && day.Date <= upTo)
-            .ToLookup(day => day.Date);
+            .SelectMany(subject => subject.Days.TakeLast(DaysBack).Select(day => (subject.Group.Limits, Day: day)))
+            .Where(one => one.Day.Plan.Expected > 0 && one.Day.Date > upTo.PlusDays(-DaysBack) && one.Day.Date <= upTo)
+            .ToLookup(one => one.Day.Date);
         if (expected.Count == 0)
         {
             return null;
         }
 
         var last = expected.MaxBy(days => days.Key)!;
-        return new PlannedPresence(last.Key, last.Count(), last.Count(day => day.State == DayState.Recorded));
+        return new PlannedPresence(last.Key, last.Count(), last.Count(one => one.Day.State == DayState.Recorded), last.Count(one => IsNotInYet(one.Day, upTo, one.Limits.Silence)));
     }
+
+    /// <summary>Whether a recording that the plan expects is not there, and the days that files are given to come in are not over: no reason to ask anybody yet.</summary>
+    public static bool IsNotInYet(Day day, LocalDate upTo, SilenceLimits limits) =>
+        day is { State: DayState.Unknown, Plan: { Expected: > 0, Absence: null } } && day.Date.PlusDays(limits.PlannedWaitDays) > upTo;
 }

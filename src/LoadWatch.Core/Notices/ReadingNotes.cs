@@ -22,7 +22,8 @@ public static class ReadingNotes
     public static IReadOnlyList<string> Cautions { get; } =
     [
         "This page describes training data. It does not diagnose, does not foretell injury, clears nobody to train, and "
-            + "is not meant for selection or contracts. The person and the responsible coach or clinician decide.",
+            + "is not meant for selection or contracts. Whether using it for patients is regulated where you are is for you to check. "
+            + "The person and the responsible coach or clinician decide.",
         "Chest pain, fainting, palpitations, unusual breathlessness, severe headache, a swollen calf, a fall or a blow "
             + "to the head, new weakness: medical help at once.",
         "No hard work with fever. No catching up after a gap: sudden hard or lengthening work can break down muscle, and "

@@ -66,7 +66,36 @@ public class CommonCauseTests
     {
         var brief = Build(Enumerable.Range(0, 6).Select(number => Person(number, silent: number < 2, expected: true)));
 
-        Assert.Contains("4 of 6 recordings of the session of 3 March are in.", brief.FirstLine, StringComparison.Ordinal);
+        Assert.Contains("4 of 6 recordings of the session of 3 March are in, 2 not in yet.", brief.FirstLine, StringComparison.Ordinal);
+    }
+
+    /// <summary>Files are given two days: of a session of yesterday or the day before one is not in yet, of an earlier one it did not come.</summary>
+    [Theory]
+    [InlineData(1, true)]
+    [InlineData(2, true)]
+    [InlineData(3, false)]
+    public void WhatMayStillComeIsNotInYet(int back, bool told)
+    {
+        var waiting = Person(0, silent: true, expected: true) with { Alerts = [] };
+        waiting = waiting with { Days = [.. Enumerable.Range(1, 3).Reverse().Select(ago => waiting.Days[0] with
+        {
+            Date = Date.PlusDays(-ago),
+            State = ago == back ? DayState.Unknown : DayState.Recorded,
+            Plan = ago == back ? DayPlan.None with { Expected = 1 } : DayPlan.None,
+        })] };
+
+        var brief = Build([waiting]);
+        Assert.Equal(told, brief.FirstLine.Contains(" are in, 1 not in yet.", StringComparison.Ordinal));
+        Assert.Equal(told, brief.Groups[0].Rows[0].Remark?.Contains(" Mar not in yet", StringComparison.Ordinal) is true);
+    }
+
+    [Fact]
+    public void WhoIsAwayIsNotWaitedFor()
+    {
+        var away = Person(0, silent: true, expected: true) with { Alerts = [] };
+
+        var brief = Build([away with { Days = [away.Days[0] with { Plan = away.Days[0].Plan with { Absence = AbsenceWord.Ill } }] }, Person(1, silent: false, expected: true)]);
+        Assert.Contains("1 of 2 recordings of the session of 3 March are in.", brief.FirstLine, StringComparison.Ordinal);
     }
 
     [Fact]
