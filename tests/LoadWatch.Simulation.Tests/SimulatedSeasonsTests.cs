@@ -1,3 +1,4 @@
+using LoadWatch.Alerts;
 using LoadWatch.Findings;
 using LoadWatch.Simulation.Counts;
 using LoadWatch.Simulation.Nights;
@@ -85,6 +86,20 @@ public class SimulatedSeasonsTests
 
         var filled = Season.Of(few, Habits.Squad.Sport, new Course { NightsBefore = 1 });
         Assert.Subset(usual.ToHashSet(), Score.CountedRaises(filled).ToHashSet());
+    }
+
+    /// <summary>Staff who never answer are told the same, and of nothing that it stands since a day on which it was over long ago.</summary>
+    [Fact]
+    public void StaffWhoNeverAnswerAreToldTheSameAndSinceWhenItStands()
+    {
+        var unanswered = Season.Of(Squad, Habits.Squad.Sport, new Course { StaffAnswer = false });
+
+        Assert.Equal(Score.CountedRaises(Usual.Value), Score.CountedRaises(unanswered));
+        var again = unanswered.People.SelectMany(person => person.Alerts.Where(alert => alert.StandsSince != alert.Raised)).ToList();
+        Assert.NotEmpty(again);
+        Assert.All(unanswered.People, person => Assert.All(person.Alerts, alert => Assert.Equal(
+            person.Changes.Last(change => change.AlertId == alert.Id && change.Reason is AlertChangeReason.Raised or AlertChangeReason.RaisedAgain).Date,
+            alert.StandsSince)));
     }
 
     /// <summary>Silence is left out: it is there to tell that files do not come.</summary>

@@ -62,6 +62,7 @@ public sealed class Report(IReadOnlyList<int> seeds, int people, int days, bool 
         {
             ("the usual one", new Course()),
             ("started anew every night, nothing computed before", new Course { FromNothing = true }),
+            ("nobody ever says that anything was seen", new Course { StaffAnswer = false }),
             ("two sweeps a night", new Course { TimesANight = 2 }),
             ("all that came before comes in the night before", new Course { NightsBefore = 1 }),
         })

@@ -21,7 +21,7 @@ public enum AlertState
 }
 
 /// <summary>A finding's life over time.</summary>
-/// <param name="Raised">The evaluation date on which it was raised.</param>
+/// <param name="Raised">The evaluation date on which it was raised the first time: part of its id.</param>
 /// <param name="Judged">The last evaluation date on which its finding held.</param>
 /// <param name="Text">Of the latest finding.</param>
 public sealed record Alert(
@@ -32,6 +32,9 @@ public sealed record Alert(
     Severity Severity,
     string Text)
 {
+    /// <summary>The evaluation date on which it was raised last, the first time or again after it had returned.</summary>
+    public LocalDate StandsSince { get; init; } = Raised;
+
     /// <summary>Last date, inclusive, up to which it is not told; null: it is. Shelving stands beside the state and changes none.</summary>
     public LocalDate? ShelvedUntil { get; init; }
 
@@ -58,7 +61,7 @@ public enum AlertChangeReason
     Acknowledged,
     ReturnedToNormal,
 
-    /// <summary>Later data undid it: as known now it did not even hold on the date it was raised (I-14).</summary>
+    /// <summary>Later data undid it: as known now it did not even hold on the date on which it was raised last (I-14).</summary>
     Corrected,
     RaisedAgain,
 

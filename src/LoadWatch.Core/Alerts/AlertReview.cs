@@ -76,7 +76,7 @@ public static class AlertReview
 
     /// <summary>
     /// Why a finding is not there. A rule that is off, or turned off by plan, says nothing, whatever came late; judged before on this very date, a later file undid
-    /// it; else what changed counts only back at its raising.
+    /// it; else what changed counts only back at its last raising.
     /// </summary>
     private static AlertSignal Why(Alert alert, LocalDate date, HashSet<FindingKey> suppressed, Func<FindingKey, LocalDate, bool> heldOn, Watching watching) =>
         watching.WhyQuiet(alert) switch
@@ -87,7 +87,7 @@ public static class AlertReview
 
             // Watched again, its rule counts anew: nobody has seen it end.
             _ when alert.Watch == AlertWatch.SuppressedByDesign => AlertSignal.Mute,
-            _ when alert.Judged < date && heldOn(alert.Key, alert.Raised) => AlertSignal.Return,
+            _ when alert.Judged < date && heldOn(alert.Key, alert.StandsSince) => AlertSignal.Return,
             QuietReason.LimitsChanged => AlertSignal.ChangeLimits,
             _ => AlertSignal.Correct,
         };
@@ -119,7 +119,8 @@ public static class AlertReview
         }
 
         var change = Change(alert, lastSequence(alert.Id) + 1 + reviewed.Changes.Length, date, step.To, step.Reason) with { Evidence = evidence };
-        return new Reviewed(alert with { State = step.To, Watch = step.Watch }, [.. reviewed.Changes, change]);
+        var since = step.Reason is AlertChangeReason.Raised or AlertChangeReason.RaisedAgain ? date : alert.StandsSince;
+        return new Reviewed(alert with { State = step.To, Watch = step.Watch, StandsSince = since }, [.. reviewed.Changes, change]);
     }
 
     /// <summary>Sets or ends shelving behind what a review found already.</summary>

@@ -11,5 +11,5 @@ public static class StaleAlerts
     public const int Days = 14;
 
     /// <param name="date">The date on which it is asked.</param>
-    public static bool IsStale(Alert alert, LocalDate date) => alert is { IsTold: true, State: AlertState.Unacknowledged } && alert.Raised < date.PlusDays(-Days);
+    public static bool IsStale(Alert alert, LocalDate date) => alert is { IsTold: true, State: AlertState.Unacknowledged } && alert.StandsSince < date.PlusDays(-Days);
 }

@@ -104,8 +104,8 @@ public sealed record FlaggedReason(
     /// <summary>Within which time a look makes a difference; empty where that is not told.</summary>
     public string TimeToRespond { get; init; } = "";
 
-    /// <summary>The date on which it was raised; null where that is not told.</summary>
-    public LocalDate? Raised { get; init; }
+    /// <summary>The date on which it was raised last; null where that is not told.</summary>
+    public LocalDate? StandsSince { get; init; }
 }
 
 /// <summary>One line about somebody or something.</summary>

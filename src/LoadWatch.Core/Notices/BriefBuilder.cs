@@ -200,7 +200,7 @@ public static class BriefBuilder
     {
         Named = RuleTexts.Named(news.Alert.Key, self),
         TimeToRespond = RuleTexts.TimeToRespond(news.Alert.Key.Rule),
-        Raised = news.Alert.Raised,
+        StandsSince = news.Alert.StandsSince,
     };
 
     private static IEnumerable<BriefLine> Returned(BriefSubject subject, bool self) => subject.Alerts

@@ -82,7 +82,7 @@ internal static class BriefWeeks
         .Where(news => StaleAlerts.IsStale(news.Alert, date))
         .Select(news => new BriefLine(
             BriefBuilder.NameOf(subject.Person, self),
-            OneLine.Sentence($"{RuleTexts.Named(news.Alert.Key, self)}: standing since {BriefNumbers.Day(news.Alert.Raised)}, {Period.DaysBetween(news.Alert.Raised, date)} days, and not acknowledged")));
+            OneLine.Sentence($"{RuleTexts.Named(news.Alert.Key, self)}: standing since {BriefNumbers.Day(news.Alert.StandsSince)}, {Period.DaysBetween(news.Alert.StandsSince, date)} days, and not acknowledged")));
 
     /// <summary>Whoever is away is not told of here.</summary>
     private static IEnumerable<BriefLine> Lost(BriefSubject subject, LocalDate upTo, bool self)

@@ -15,10 +15,10 @@ internal static class PersonSentence
     /// <summary>Several sentences as one, without the last full stop.</summary>
     public static string Part(string text) => OneLine.Of(text).TrimEnd('.').Split(". ").Aggregate((told, next) => $"{told}; {Lowered(next)}");
 
-    public static string Since(FlaggedReason reason) => (reason.IsNew, reason.Raised) switch
+    public static string Since(FlaggedReason reason) => (reason.IsNew, reason.StandsSince) switch
     {
         (true, _) => "new",
-        (_, { } raised) => $"since {BriefNumbers.Day(raised)}",
+        (_, { } since) => $"since {BriefNumbers.Day(since)}",
         _ => "",
     };
 

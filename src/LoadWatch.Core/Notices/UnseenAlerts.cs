@@ -20,16 +20,16 @@ internal static class UnseenAlerts
 
         var stale = shown
             .SelectMany(subject => subject.Alerts.Where(news => StaleAlerts.IsStale(news.Alert, date)).Select(news => (subject.Person, news.Alert)))
-            .OrderBy(one => one.Alert.Raised)
+            .OrderBy(one => one.Alert.StandsSince)
             .ThenBy(one => one.Alert.Id, StringComparer.Ordinal)
             .ToList();
         var named = stale.Take(NamedAtMost).Select(one => new BriefLine(
             BriefBuilder.NameOf(one.Person, self),
-            $"{RuleTexts.Named(one.Alert.Key, self)} since {Since(one.Alert.Raised, date)}, and nobody has said that it was seen: answer \"seen\", or shelve it"));
+            $"{RuleTexts.Named(one.Alert.Key, self)} since {Since(one.Alert.StandsSince, date)}, and nobody has said that it was seen: answer \"seen\", or shelve it"));
         return stale.Count > NamedAtMost
             ? [.. named, new BriefLine("Standing alerts", FormattableString.Invariant($"{stale.Count - NamedAtMost} more have stood for over {StaleAlerts.Days} days, and nobody has said that they were seen"))]
             : [.. named];
     }
 
-    private static string Since(LocalDate raised, LocalDate date) => raised.ToString(raised.Year == date.Year ? "d MMMM" : "d MMMM uuuu", CultureInfo.InvariantCulture);
+    private static string Since(LocalDate since, LocalDate date) => since.ToString(since.Year == date.Year ? "d MMMM" : "d MMMM uuuu", CultureInfo.InvariantCulture);
 }

@@ -14,7 +14,7 @@ namespace LoadWatch.Replays;
 /// <param name="Wavering">Runs of three changes within 7 days of what one alert is about (<see cref="Chatter"/>).</param>
 /// <param name="Corrected">Alerts that a later file undid: none in a replay, which knows every file from its day on.</param>
 /// <param name="Standing">Alerts that stand on the last date.</param>
-/// <param name="StandingLong">Those of them raised more than 14 days before it.</param>
+/// <param name="StandingLong">Those of them raised last more than 14 days before it.</param>
 /// <param name="Leads">One for each mark.</param>
 public sealed record ReplayFigures(
     int Days, IReadOnlyList<RaisedByRule> Raised, IReadOnlyList<RaisedForContact> Contacts, int Wavering, int Corrected, int Standing, int StandingLong, IReadOnlyList<Lead> Leads)
@@ -43,7 +43,7 @@ public sealed record ReplayFigures(
             people.Sum(person => Chatter.Of(person.Changes.Where(change => change.Date >= from && change.Date <= to), id => person.Keys[id])),
             people.Sum(person => person.Changes.Count(change => change.Reason == AlertChangeReason.Corrected && change.Date >= from && change.Date <= to)),
             standing.Count,
-            standing.Count(alert => alert.Raised < to.PlusDays(-StandingDays)),
+            standing.Count(alert => alert.StandsSince < to.PlusDays(-StandingDays)),
             [.. marks.Select(mark => Before(mark, people))]);
     }
 

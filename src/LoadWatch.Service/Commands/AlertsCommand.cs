@@ -52,7 +52,7 @@ public static class AlertsCommand
         foreach (var alert in alerts)
         {
             Console.Out.WriteLine(
-                $"{OneLine.Of(configuration.People[alert.Key.Person].Name)}: {Words.Of(alert.Severity)}, {Words.Of(alert.State)}{AlertWords.Aside(alert)}, raised {Words.Date(alert.Raised)}");
+                $"{OneLine.Of(configuration.People[alert.Key.Person].Name)}: {Words.Of(alert.Severity)}, {Words.Of(alert.State)}{AlertWords.Aside(alert)}, {AlertWords.Since(alert)}");
             Console.Out.WriteLine($"    {OneLine.Of(alert.Text)}");
             Console.Out.WriteLine($"    {alert.Id}");
         }

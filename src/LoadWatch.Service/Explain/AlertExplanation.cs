@@ -22,7 +22,7 @@ public static class AlertExplanation
     {
         var text = new StringBuilder();
         text.AppendLine(CultureInfo.InvariantCulture, $"{OneLine.Of(alert.Text)}");
-        text.AppendLine(CultureInfo.InvariantCulture, $"{Words.Of(alert.Severity)}, {Words.Of(alert.State)}{AlertWords.Aside(alert)}, raised {Words.Date(alert.Raised)}");
+        text.AppendLine(CultureInfo.InvariantCulture, $"{Words.Of(alert.Severity)}, {Words.Of(alert.State)}{AlertWords.Aside(alert)}, {AlertWords.Since(alert)}");
         foreach (var decision in decisions)
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"{DecisionText.Sentence(decision, decisions)}");

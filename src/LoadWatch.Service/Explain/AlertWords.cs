@@ -6,6 +6,11 @@ namespace LoadWatch.Service.Explain;
 /// <summary>What stands beside an alert's state, in words.</summary>
 internal static class AlertWords
 {
+    /// <summary>When it was raised; both dates where it was raised again since.</summary>
+    public static string Since(Alert alert) => alert.StandsSince == alert.Raised
+        ? $"raised {Words.Date(alert.Raised)}"
+        : $"raised {Words.Date(alert.Raised)}, again {Words.Date(alert.StandsSince)}";
+
     /// <summary>Behind the state; empty where it is told, or was.</summary>
     public static string Aside(Alert alert)
     {

@@ -9,14 +9,14 @@ namespace LoadWatch.Storage.Alerts;
 /// <summary>Tables <c>alert</c> and <c>alert_change</c>: where each alert stands, and every step of how it came there.</summary>
 public sealed class AlertTable
 {
-    private const string Columns = "id, person, rule, about, raised, judged, state, severity, text, shelved_until, watch, limits_hash";
+    private const string Columns = "id, person, rule, about, raised, judged, state, severity, text, shelved_until, watch, limits_hash, stands_since";
 
     private const string Upsert = $"""
         INSERT INTO alert ({Columns})
-        VALUES (@Id, @Person, @Rule, @About, @Raised, @Judged, @State, @Severity, @Text, @ShelvedUntil, @Watch, @LimitsHash)
+        VALUES (@Id, @Person, @Rule, @About, @Raised, @Judged, @State, @Severity, @Text, @ShelvedUntil, @Watch, @LimitsHash, @StandsSince)
         ON CONFLICT (id) DO UPDATE SET
             judged = excluded.judged, state = excluded.state, severity = excluded.severity, text = excluded.text, shelved_until = excluded.shelved_until,
-            watch = excluded.watch, limits_hash = excluded.limits_hash
+            watch = excluded.watch, limits_hash = excluded.limits_hash, stands_since = excluded.stands_since
         """;
 
     private const string SelectOpen = $"SELECT {Columns} FROM alert WHERE person = @person AND state <> 'normal' ORDER BY id";
@@ -78,6 +78,8 @@ public sealed class AlertTable
 
         public string? LimitsHash { get; init; }
 
+        public LocalDate StandsSince { get; init; }
+
         public static Row From(Alert alert) => new()
         {
             Id = alert.Id,
@@ -92,6 +94,7 @@ public sealed class AlertTable
             ShelvedUntil = alert.ShelvedUntil,
             Watch = Words<AlertWatch>.Of(alert.Watch),
             LimitsHash = alert.LimitsHash,
+            StandsSince = alert.StandsSince,
         };
 
         public Alert ToAlert() => new(
@@ -105,6 +108,7 @@ public sealed class AlertTable
             ShelvedUntil = ShelvedUntil,
             Watch = Words<AlertWatch>.Parse(Watch),
             LimitsHash = LimitsHash,
+            StandsSince = StandsSince,
         };
     }
 }

@@ -100,6 +100,32 @@ public class AlertReviewTests
         Assert.Equal((On(5), On(9), Severity.Warning), (result.Alerts[0].Raised, result.Alerts[0].Judged, result.Alerts[0].Severity));
     }
 
+    /// <summary>Returned on the 6th, never acknowledged, raised again on the 25th: it stands since then, under the id that it had.</summary>
+    [Fact]
+    public void WhatIsRaisedAgainStandsSinceThen()
+    {
+        var returned = Review(6, [Alert(AlertState.Unacknowledged)]).Alerts;
+        var again = Assert.Single(Review(25, [.. returned], Find(Legs, 25)).Alerts);
+        var still = Assert.Single(Review(30, [again], Find(Legs, 30)).Alerts);
+
+        Assert.Equal((On(5), On(25), Alert(AlertState.Unacknowledged).Id), (again.Raised, again.StandsSince, again.Id));
+        Assert.Equal((On(25), On(30)), (still.StandsSince, still.Judged));
+        Assert.False(StaleAlerts.IsStale(again, On(26)));
+        Assert.True(StaleAlerts.IsStale(still, On(40)));
+    }
+
+    /// <summary>I-14: a late file undoes what was raised on the 9th, and nothing of the 5th, which was over long before.</summary>
+    [Fact]
+    public void ACorrectionIsAskedAtTheLastRaising()
+    {
+        var again = Alert(AlertState.Unacknowledged) with { StandsSince = On(9), Judged = On(9) };
+
+        var result = AlertReview.Review("anna", On(10), [again], _ => 3, [], (_, date) => date == On(5));
+
+        AssertChange(result, 4, AlertState.Unacknowledged, AlertState.Returned, AlertChangeReason.Corrected);
+        Assert.Equal(On(9), result.Alerts[0].StandsSince);
+    }
+
     [Fact]
     public void AReturnedAlertWithoutFindingWaitsToBeAcknowledged()
     {

@@ -10,13 +10,13 @@ public class StaleAlertsTests
 {
     private static readonly LocalDate Monday = new(2026, 3, 2);
 
-    private static readonly Alert Standing = MorningExamples.LoadRatio("a").Alert with { Raised = Monday.PlusDays(-15) };
+    private static readonly Alert Standing = MorningExamples.LoadRatio("a").Alert with { StandsSince = Monday.PlusDays(-15) };
 
     [Fact]
     public void WhatStandsForMoreThanFourteenDaysUnseenIsStale()
     {
         Assert.True(StaleAlerts.IsStale(Standing, Monday));
-        Assert.False(StaleAlerts.IsStale(Standing with { Raised = Monday.PlusDays(-14) }, Monday));
+        Assert.False(StaleAlerts.IsStale(Standing with { StandsSince = Monday.PlusDays(-14) }, Monday));
         Assert.False(StaleAlerts.IsStale(Standing with { State = AlertState.Acknowledged }, Monday));
         Assert.False(StaleAlerts.IsStale(Standing with { State = AlertState.Returned }, Monday));
         Assert.False(StaleAlerts.IsStale(Standing with { ShelvedUntil = Monday }, Monday));
@@ -40,7 +40,7 @@ public class StaleAlertsTests
     public void FiveAreNamedTheLongestFirstAndTheRestIsCounted()
     {
         var subjects = Enumerable.Range(0, 8).Select(at => MorningExamples.Subject(
-            $"p{at}", $"Person {at}", new AlertNews(MorningExamples.LoadRatio($"p{at}").Alert with { Raised = Monday.PlusDays(-20 - at) }, IsNew: false, ReturnedSince: false, Corrected: false)));
+            $"p{at}", $"Person {at}", new AlertNews(MorningExamples.LoadRatio($"p{at}").Alert with { StandsSince = Monday.PlusDays(-20 - at) }, IsNew: false, ReturnedSince: false, Corrected: false)));
 
         var asked = BriefBuilder.Build(MorningExamples.Contact(ContactRole.Coach), Monday, [.. subjects], []).Questions;
 

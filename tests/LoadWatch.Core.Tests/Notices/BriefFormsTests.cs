@@ -90,8 +90,8 @@ public sealed class BriefFormsTests
     [Fact]
     public void WhatNobodyAcknowledgedForMoreThanAFortnightIsListed()
     {
-        var old = StimulusGap("b") with { Alert = StimulusGap("b").Alert with { Raised = new LocalDate(2026, 2, 15) } };
-        var seen = StimulusGap("c", state: AlertState.Acknowledged) with { Alert = StimulusGap("c", state: AlertState.Acknowledged).Alert with { Raised = new LocalDate(2026, 1, 15) } };
+        var old = StimulusGap("b") with { Alert = StimulusGap("b").Alert with { StandsSince = new LocalDate(2026, 2, 15) } };
+        var seen = StimulusGap("c", state: AlertState.Acknowledged) with { Alert = StimulusGap("c", state: AlertState.Acknowledged).Alert with { StandsSince = new LocalDate(2026, 1, 15) } };
         var week = Build(Everything(), Subject("a", "Ann", LoadRatio("a")), Subject("b", "Ben", old), Subject("c", "Cas", seen)).Week!;
 
         Assert.Equal([new BriefLine("Ben", "No heavy or fast leg work lately: standing since 15 Feb, 15 days, and not acknowledged.")], week.Standing);
@@ -231,7 +231,7 @@ public sealed class BriefFormsTests
     {
         BriefSubject[] people =
         [
-            Planned(Subject("tarrow", "Ann Tarrow", StimulusGap("tarrow") with { Alert = StimulusGap("tarrow").Alert with { Raised = new LocalDate(2026, 1, 1) } })),
+            Planned(Subject("tarrow", "Ann Tarrow", StimulusGap("tarrow") with { Alert = StimulusGap("tarrow").Alert with { StandsSince = new LocalDate(2026, 1, 1) } })),
             Planned(Subject("ollery", "Ben Ollery", Silence("ollery"))) with { Days = Trends("ollery", 90, _ => 80, back => back < 28 ? back == 20 : back % 4 == 0) },
         ];
         foreach (var forms in new[] { Enum.GetValues<BriefForm>(), [BriefForm.Weekly, BriefForm.CallList, BriefForm.ClassSheet] })

@@ -1,6 +1,8 @@
+using Dapper;
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
 using LoadWatch.Stimulus;
+using LoadWatch.Storage.Dialects;
 using Microsoft.Data.Sqlite;
 
 namespace LoadWatch.Storage.Tests.Alerts;
@@ -31,11 +33,34 @@ public sealed class AlertTableTests(SharedFolder shared) : StoreTest(shared)
             Severity = Severity.Warning,
             Text = "higher",
             ShelvedUntil = Some.Date.PlusDays(20),
+            StandsSince = Some.Date.PlusDays(8),
         };
         Store.Write(session => session.Alerts.Put(Some.Alert()));
         Store.Write(session => session.Alerts.Put(changed));
 
         Assert.Equal(changed, Assert.Single(Store.Read(session => session.Alerts.All())));
+    }
+
+    /// <summary>What was stored before alerts held the date: the last change that raised it, or the first date where no change is stored.</summary>
+    [Fact]
+    public void AnOlderStoreIsToldSinceWhenItsAlertsStand()
+    {
+        Store.Write(session =>
+        {
+            session.Alerts.Put(Some.Alert());
+            session.Alerts.Changes.Append(Some.Change(Some.Alert(), 1));
+            session.Alerts.Changes.Append(Some.Change(Some.Alert(), 2) with { Date = Some.Date.PlusDays(90), Reason = AlertChangeReason.RaisedAgain });
+            session.Alerts.Changes.Append(Some.Change(Some.Alert(), 3) with { Date = Some.Date.PlusDays(95), Reason = AlertChangeReason.Acknowledged });
+            session.Alerts.Put(Some.Alert("bo") with { StandsSince = Some.Date.PlusDays(50) });
+        });
+        using var script = new StreamReader(typeof(Store).Assembly.GetManifestResourceStream(SqliteSchema.Scripts.Single(name => name.EndsWith("0015_alert_since.sql", StringComparison.Ordinal)))!);
+        using (var connection = new SqliteConnection($"Data Source={Folder.DatabasePath};Pooling=False"))
+        {
+            connection.Open();
+            connection.Execute(script.ReadToEnd().Split("\n;\n")[1]);
+        }
+
+        Assert.Equal([Some.Date.PlusDays(90), Some.Date], Store.Read(session => session.Alerts.All()).Select(alert => alert.StandsSince));
     }
 
     [Fact]
