@@ -32,10 +32,11 @@ internal sealed record ClinicYear(string Root, int People)
               "time_zone": "UTC",
               "groups": [{ "id": "all" }],
               "contacts": [
-                { "id": "coach", "forms": ["daily", "weekly"] },
-                { "id": "clinician", "role": "clinician", "names": "initials" },
+                { "id": "coach", "forms": ["daily", "weekly"], "mail": "coach@example.org" },
+                { "id": "clinician", "role": "clinician", "names": "initials", "mail": "clinician@example.org" },
                 { "id": "desk", "role": "front_desk" }
-              ]
+              ],
+              "mail": { "host": "mail.example.org", "from": "loadwatch@example.org" }
             }
             """);
         var roster = new StringBuilder("person,name,group,birth_year\n");
