@@ -44,25 +44,25 @@ public sealed class TableBasis
 
     /// <summary>A person's reference values, of the configuration, of the tables and from own sessions.</summary>
     /// <param name="first">What is asked for are dates from this one on; null: any.</param>
-    public AnchorBook AnchorsOf(Person person, LocalDate? first = null) => Known(person, first ?? LocalDate.MinIsoValue).Book;
+    public AnchorBook AnchorsOf(Person person, LocalDate? first = null) => Known(person, first).Book;
 
     /// <summary>Those from own sessions alone, sorted by month.</summary>
     /// <inheritdoc cref="AnchorsOf"/>
-    public IReadOnlyList<ObservedAnchor> ObservedOf(Person person, LocalDate? first = null) => Known(person, first ?? LocalDate.MinIsoValue).Observed;
+    public IReadOnlyList<ObservedAnchor> ObservedOf(Person person, LocalDate? first = null) => Known(person, first).Observed;
 
     /// <summary>Who is asked for earlier dates as well is read once more, and then whole.</summary>
-    private PersonAnchors Known(Person person, LocalDate first)
+    private PersonAnchors Known(Person person, LocalDate? first)
     {
-        if (anchors.TryGetValue(person.Id, out var known) && known.First <= first)
+        if (anchors.TryGetValue(person.Id, out var known) && (known.First is null || known.First <= first))
         {
             return known;
         }
 
-        var from = known is null ? first : LocalDate.MinIsoValue;
+        var from = known is null ? first : null;
         return anchors[person.Id] = Of(person, from, Read(session => session.ObservedAnchors.OfPerson(person.Id, from)));
     }
 
-    private PersonAnchors Of(Person person, LocalDate first, IReadOnlyList<ObservedAnchor> observed)
+    private PersonAnchors Of(Person person, LocalDate? first, IReadOnlyList<ObservedAnchor> observed)
     {
         var stated = StatedOf(person);
         return new PersonAnchors(first, observed, observed.Count == 0 ? stated : stated.OfPerson(person.Id).With(observed.Select(one => one.ToAnchor())));
@@ -80,7 +80,7 @@ public sealed class TableBasis
 
         foreach (var (person, own) in observed)
         {
-            other.anchors[person] = Of(configuration.People[person], LocalDate.MinIsoValue, own);
+            other.anchors[person] = Of(configuration.People[person], first: null, own);
         }
 
         return other;
@@ -144,6 +144,6 @@ public sealed class TableBasis
             ? new Anchor(person, row.Date, kind.Kind, value, AnchorSource.Measured, test.Exercise, Machine: test.Machine)
             : null;
 
-    /// <param name="First">Holds for dates from this one on.</param>
-    private sealed record PersonAnchors(LocalDate First, IReadOnlyList<ObservedAnchor> Observed, AnchorBook Book);
+    /// <param name="First">Holds for dates from this one on; null: for any.</param>
+    private sealed record PersonAnchors(LocalDate? First, IReadOnlyList<ObservedAnchor> Observed, AnchorBook Book);
 }
