@@ -9,7 +9,7 @@ internal static class Babel
 {
     private static readonly LocalDateTimePattern Moment = LocalDateTimePattern.CreateWithInvariantCulture("uuuu/MM/dd HH:mm:ss");
 
-    public static void SkipUnlessThere() => Programs.SkipUnless(Programs.Has("gpsbabel"), "gpsbabel is not on this machine");
+    public static void SkipUnlessThere() => Programs.SkipUnless("gpsbabel", Programs.Has("gpsbabel"), "gpsbabel is not on this machine");
 
     /// <summary>The points of a file in the form of <see cref="ReferencePart.Records"/>; null where it is refused.</summary>
     public static IReadOnlyList<double?[]>? Read(byte[] file)

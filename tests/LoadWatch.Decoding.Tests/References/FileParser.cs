@@ -12,7 +12,7 @@ internal static class FileParser
     private static readonly string Folder = Path.Combine(Repository.Root, "tests", "References");
     private static readonly Lazy<bool> Runs = new(() => Directory.Exists(Path.Combine(Folder, "node_modules", "fit-file-parser")) && Programs.Has("node"));
 
-    public static void SkipUnlessThere() => Programs.SkipUnless(Runs.Value, "node or fit-file-parser is not on this machine (npm ci in tests/References)");
+    public static void SkipUnlessThere() => Programs.SkipUnless("fit-file-parser", Runs.Value, "node or fit-file-parser is not on this machine (npm ci in tests/References)");
 
     /// <summary>What it gives of each content, in their order.</summary>
     public static IReadOnlyList<ReferencePart> Read(IReadOnlyList<byte[]> contents)
@@ -35,12 +35,13 @@ internal static class FileParser
 /// <summary>Programs beside the tests.</summary>
 internal static class Programs
 {
-    private static readonly bool AreRequired = Environment.GetEnvironmentVariable("LOADWATCH_REFERENCES") == "required";
+    /// <summary>The one that must run, or <c>required</c> for both.</summary>
+    private static readonly string Required = Environment.GetEnvironmentVariable("LOADWATCH_REFERENCES") ?? "";
 
-    /// <summary>Where references are required, one that is missing is a failure.</summary>
-    public static void SkipUnless(bool there, string reason)
+    /// <summary>Where a reference is required, that it is missing is a failure.</summary>
+    public static void SkipUnless(string reference, bool there, string reason)
     {
-        Assert.True(there || !AreRequired, reason);
+        Assert.True(there || (Required != "required" && Required != reference), reason);
         Assert.SkipUnless(there, reason);
     }
 
