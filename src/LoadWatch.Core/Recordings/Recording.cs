@@ -52,7 +52,7 @@ public sealed record Recording
 
     public int Laps { get; init; }
 
-    /// <summary>Pool lengths.</summary>
+    /// <summary>Pool lengths as the device wrote them; some write an idle one for each rest at the wall, which counts here too.</summary>
     public int Lengths { get; init; }
 
     /// <summary>What is stated a second time by another app and does not count.</summary>

@@ -20,6 +20,7 @@ public sealed class FitDecoder
     private readonly List<Recording> worn = [];
     private readonly List<LocalDate> wornDates = [];
     private PartContent? pending;
+    private bool isBehindDamage;
 
     private readonly bool salvages;
 
@@ -121,6 +122,7 @@ public sealed class FitDecoder
     private void Refuse(Problem fault)
     {
         Settle();
+        isBehindDamage = true;
         problems.Add(fault);
     }
 
@@ -129,13 +131,19 @@ public sealed class FitDecoder
     {
         fileTypes.Add(content.FileType);
         if (content.HasOnlyBeats && pending is null)
-            problems.Add(new Problem(ProblemSeverity.Warning, "heart beats without an activity before them", offset));
+        {
+            var reason = isBehindDamage
+                ? "heart beats behind a damaged part are not used: whether they belong to it cannot be told"
+                : "heart beats without an activity before them";
+            problems.Add(new Problem(ProblemSeverity.Warning, reason, offset));
+        }
         else if (content.HasOnlyBeats)
             pending!.Late.Beats.AddRange(content.Late.Beats.Items);
         else if (content.HasTraining)
         {
             Settle();
             pending = content;
+            isBehindDamage = false;
         }
         else if (!content.Monitoring.IsEmpty)
             TakeMonitoring(content);

@@ -18,7 +18,6 @@ internal static class FitMessages
     public const int HeartRate = 132;
     public const int TimestampCorrelation = 162;
     public const int FieldDescription = 206;
-    public const int DeveloperDataId = 207;
     public const int Set = 225;
 
     /// <summary>Whether the decoder reads more of it than its length and its time.</summary>

@@ -26,7 +26,10 @@ internal static class FitSalvage
             && IsSteady(reader.Content.Samples);
     }
 
-    /// <summary>The last two bytes may be a checksum where the size does not tell: they are left.</summary>
+    /// <summary>
+    /// The last two bytes may be a checksum where the size does not tell: they are left, whatever the header. Taken for data they could end a message with a
+    /// wrong value; left they cost no more than the last message.
+    /// </summary>
     private static ReadOnlySpan<byte> Data(FitFrame frame, ReadOnlySpan<byte> bytes)
     {
         var data = bytes[frame.DataStart..];

@@ -31,7 +31,7 @@ internal sealed class MonitoringLog(MemoryBudget budget)
             return;
 
         if (message.Int(FitFields.Monitoring.HeartRate) is { } rate and > 0)
-            Set(Before(at), minute => minute with { HeartRate = rate });
+            Keep(Before(at), Known(Before(at)) with { HeartRate = rate });
 
         if (Kind(message) is { } kind and (Running or Walking) && (message.Number(FitFields.Monitoring.Steps) ?? message.Number(FitFields.Monitoring.Steps16)) is { } count)
             Count(kind, at, count);
@@ -63,7 +63,8 @@ internal sealed class MonitoringLog(MemoryBudget budget)
 
         for (var minute = Before(at); minute > Before(at) - spread; minute--)
         {
-            Set(minute, known => known with
+            var known = Known(minute);
+            Keep(minute, known with
             {
                 Steps = known.Steps + (steps / spread),
                 RunningSteps = known.RunningSteps + (kind == Running ? steps / spread : 0),
@@ -71,11 +72,13 @@ internal sealed class MonitoringLog(MemoryBudget budget)
         }
     }
 
-    private void Set(long minute, Func<MonitoredMinute, MonitoredMinute> change)
+    private MonitoredMinute Known(long minute) => minutes.GetValueOrDefault(minute);
+
+    private void Keep(long minute, MonitoredMinute said)
     {
         var isKnown = minutes.TryGetValue(minute, out var before);
-        var after = minutes[minute] = change(before);
-        budget.Spend((isKnown ? 0 : MinuteCost) + (before.Steps > 0 || after.Steps == 0 ? 0 : WalkedMinuteCost));
+        minutes[minute] = said;
+        budget.Spend((isKnown ? 0 : MinuteCost) + (before.Steps > 0 || said.Steps == 0 ? 0 : WalkedMinuteCost));
     }
 }
 

@@ -160,6 +160,18 @@ public class FitDamageTests
     }
 
     [Fact]
+    public void BeatsBehindADamagedPartAreNamedForWhatTheyAre()
+    {
+        var damaged = Beats(1);
+        damaged[^1] ^= 1;
+        var decoded = Parts.Decode(Parts.Activity(), damaged, Beats(2));
+        Assert.Empty(Assert.Single(decoded.Recordings).LateHeartRates);
+        Assert.Equal(
+            ["wrong checksum: this part is damaged or was never finished", "heart beats behind a damaged part are not used: whether they belong to it cannot be told"],
+            decoded.Problems.Select(problem => problem.Reason));
+    }
+
+    [Fact]
     public void AWholePartBehindADamagedOneStands()
     {
         var damaged = Parts.Activity();
