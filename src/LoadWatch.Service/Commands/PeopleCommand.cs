@@ -76,14 +76,14 @@ public static class PeopleCommand
                 line.WeekLoad is { } load ? FormattableString.Invariant($"{load:0}") : "?",
                 line.RatioUncoupled is { } ratio ? FormattableString.Invariant($"{ratio:0.00}") : "?",
                 line.Coverage28 is { } coverage ? FormattableString.Invariant($"{100 * coverage:0} %") : "?",
-                line.DaysSinceHeavyOrFastLegs is { } days ? FormattableString.Invariant($"{days} days") : "?",
+                line.DaysSinceHeavyOrFastLegs is { } days ? FormattableString.Invariant($"{days} {(days == 1 ? "day" : "days")}") : "?",
                 line.Absence is { } word ? $"{word} since {line.AbsentSince}{(line.AbsentUntil is { } until ? $" until {until}" : "")}" : "");
         }
 
         TableOutput.Write(table);
         Console.Out.WriteLine(
-            "last: last recording. week: load of 7 days. ratio: against the 21 days before. known: share of 28 days with known load. "
-            + "legs: since the last heavy or fast leg work. ?: unknown.");
+            "last: last recording. week: load of 7 days, made whole where some of them are unknown (a brief shows it as it is so far). ratio: against the mean week of "
+            + "the 21 days before, made whole likewise. known: share of 28 days with known load. legs: since the last heavy or fast leg work. ?: unknown.");
     }
 
     private sealed record PersonLine(
