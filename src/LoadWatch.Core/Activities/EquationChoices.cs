@@ -14,6 +14,11 @@ public sealed record EquationChoices
     /// <summary>Estimates a maximal heart rate from age where none is anchored: tanaka, nes, gellish (from memory), gulati (of women only, of others tanaka) or sydo.</summary>
     public HeartRateMaxEquation HeartRateMaxByAge { get; init; } = HeartRateMaxEquation.Tanaka;
 
+    /// <summary>How far a heart rate of own sessions may lie above that of age and still be taken for a maximum, bpm; beyond it is a strap's fault. Three standard deviations of
+    /// the equations (about 10, from memory). 10 to 60.</summary>
+    [Range(10.0, 60.0)]
+    public double HeartRateAboveEquation { get; init; } = 30;
+
     /// <summary>Tells the share of the maximum from repetitions to failure: load_chart, epley, brzycki, lander (from memory), mayhew or wathan.</summary>
     public OneRepetitionMaxEquation OneRepetitionMaxByRepetitions { get; init; } = OneRepetitionMaxEquation.LoadChart;
 

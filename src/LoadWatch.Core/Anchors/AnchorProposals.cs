@@ -1,3 +1,4 @@
+using LoadWatch.Activities;
 using LoadWatch.Capacity;
 using LoadWatch.Loads;
 using LoadWatch.People;
@@ -16,9 +17,6 @@ internal static class AnchorProposals
     private const int HeartRateSeconds = 15;
     private const double HeartRateErrorBpm = 3;
 
-    /// <summary>Three standard deviations of the equation by age, of about 10 (from memory).</summary>
-    private const double AboveEquationBpm = 30;
-
     /// <summary>A maximal power counts for so long, as <see cref="PowerCapacity"/> wants it.</summary>
     private const int PowerMaxMonths = 6;
 
@@ -31,9 +29,9 @@ internal static class AnchorProposals
 
     /// <summary>Each entry stands and falls as one.</summary>
     public static IEnumerable<IReadOnlyList<ObservedAnchor>> Of(
-        Person person, HeartRateMaxEquation byAge, LocalDate month, IReadOnlyList<SessionBests> sessions, IReadOnlyList<ShownMaximum> maxima) =>
+        Person person, EquationChoices equations, LocalDate month, IReadOnlyList<SessionBests> sessions, IReadOnlyList<ShownMaximum> maxima) =>
     [
-        HeartRate(person, byAge, month, sessions),
+        HeartRate(person, equations, month, sessions),
         .. SessionBests.BySport(sessions, Channel.Power).SelectMany(sport => new[] { Power(person.Id, month, sport.Key, [.. sport]), PowerMax(person.Id, month, sport.Key, [.. sport]) }),
         .. SessionBests.BySport(sessions, Channel.Speed).Select(runs => Speed(person.Id, month, [.. runs])),
         .. maxima.GroupBy(one => (one.Exercise, one.Machine)).OrderBy(same => same.Key.Exercise, StringComparer.Ordinal).ThenBy(same => same.Key.Machine, StringComparer.Ordinal)
@@ -44,12 +42,14 @@ internal static class AnchorProposals
     /// The highest heart rate held for 15 s that two sessions reached. Of those who never go to their limit it lies below the true one; so it is taken only above what age
     /// lets expect, where the birth year is known.
     /// </summary>
-    private static IReadOnlyList<ObservedAnchor> HeartRate(Person person, HeartRateMaxEquation byAge, LocalDate month, IReadOnlyList<SessionBests> sessions)
+    private static IReadOnlyList<ObservedAnchor> HeartRate(Person person, EquationChoices equations, LocalDate month, IReadOnlyList<SessionBests> sessions)
     {
-        var expected = person.AgeOn(month) is { } age ? byAge.BpmAt(age, person.Sex) : null;
+        var expected = person.AgeOn(month) is { } age ? equations.HeartRateMaxByAge.BpmAt(age, person.Sex) : null;
         var shown = sessions
-            .Select(session => (session.Date, Bpm: Math.Floor(session.Best(Channel.HeartRate, HeartRateSeconds) ?? 0)))
-            .Where(one => !(one.Bpm > expected + AboveEquationBpm))
+            .Select(session => (session.Date, Best: session.Best(Channel.HeartRate, HeartRateSeconds)))
+            .Where(one => one.Best is not null)
+            .Select(one => (one.Date, Bpm: Math.Floor(one.Best!.Value)))
+            .Where(one => !(one.Bpm > expected + equations.HeartRateAboveEquation))
             .OrderByDescending(one => one.Bpm).ThenByDescending(one => one.Date)
             .ToList();
         return shown.Count < SessionsWanted || shown[SessionsWanted - 1].Bpm <= expected + HeartRateErrorBpm

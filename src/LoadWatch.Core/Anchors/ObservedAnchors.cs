@@ -1,6 +1,7 @@
 // A month's values rest on the 12 months before it, and on nothing else: on best means and on sets, which no reference value bears on. So none depends on another or on
 // itself, sessions computed again by an adopted value show the same bests, and neither the order of files nor that of months computed matters.
 // A value is adopted for a month where there is none yet, or where it lies further from the adopted one than its error; else the adopted one goes on.
+using LoadWatch.Activities;
 using LoadWatch.Capacity;
 using LoadWatch.Loads;
 using LoadWatch.People;
@@ -21,13 +22,13 @@ public static class ObservedAnchors
     public static LocalDate MonthBehind(LocalDate date) => MonthOf(date).PlusMonths(1);
 
     /// <summary>What is adopted from one month through another, in the order of months and kinds.</summary>
-    /// <param name="byAge">What age lets expect of a maximal heart rate.</param>
+    /// <param name="equations">What age lets expect of a maximal heart rate, and how far above it one may lie.</param>
     /// <param name="sessions">Of the person, in any order; those of 12 months before the first month and on.</param>
     /// <param name="maxima">Likewise.</param>
     /// <param name="standing">Adopted for earlier months.</param>
     public static IReadOnlyList<ObservedAnchor> Of(
         Person person,
-        HeartRateMaxEquation byAge,
+        EquationChoices equations,
         IReadOnlyCollection<SessionBests> sessions,
         IReadOnlyCollection<ShownMaximum> maxima,
         IEnumerable<ObservedAnchor> standing,
@@ -40,7 +41,7 @@ public static class ObservedAnchors
         {
             var since = month.PlusMonths(-Months);
             var proposals = AnchorProposals.Of(
-                person, byAge, month, [.. sessions.Where(one => one.Date >= since && one.Date < month)], [.. maxima.Where(one => one.Date >= since && one.Date < month)]);
+                person, equations, month, [.. sessions.Where(one => one.Date >= since && one.Date < month)], [.. maxima.Where(one => one.Date >= since && one.Date < month)]);
             foreach (var one in proposals.Where(proposal => proposal.Count > 0).SelectMany(proposal => Adopted(proposal, holding)))
             {
                 holding[one.Of] = one;

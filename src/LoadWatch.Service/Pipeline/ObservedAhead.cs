@@ -89,7 +89,7 @@ public sealed class ObservedAhead(WorkingConfiguration configuration, Store stor
     private (IReadOnlyList<ObservedAnchor> Anchors, LocalDate Last) Observed(Person person, Sight sight, IReadOnlyList<SessionBests> fresh)
     {
         var last = ObservedAnchors.MonthOf(fresh.Max(session => session.Date));
-        var observed = ObservedAnchors.Of(person, configuration.Computation.Equations.HeartRateMaxByAge, sight.Sessions, [], sight.Anchors!, sight.First, last);
+        var observed = ObservedAnchors.Of(person, configuration.Computation.Equations, sight.Sessions, [], sight.Anchors!, sight.First, last);
         return ([.. observed, .. sight.Anchors!.Where(one => one.From > last || (one.From >= sight.First && one.Kind == AnchorKind.OneRepetitionMax))], last);
     }
 

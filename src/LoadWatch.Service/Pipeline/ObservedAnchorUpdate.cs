@@ -90,6 +90,6 @@ public sealed class ObservedAnchorUpdate(WorkingConfiguration configuration, Sto
                 .SelectMany(one => ShownMaxima.Of(one.Date, one.Quantities, configuration.Computation.Exercises.Keys)),
         ];
         return ObservedAnchors.Of(
-            person, configuration.Computation.Equations.HeartRateMaxByAge, session.Activities.Bests(person.Id, since, last), [.. maxima], session.ObservedAnchors.OfPerson(person.Id), from, last);
+            person, configuration.Computation.Equations, session.Activities.Bests(person.Id, since, last), [.. maxima], session.ObservedAnchors.OfPerson(person.Id), from, last);
     }
 }

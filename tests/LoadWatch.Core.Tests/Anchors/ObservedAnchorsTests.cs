@@ -1,4 +1,5 @@
 using CsCheck;
+using LoadWatch.Activities;
 using LoadWatch.Capacity;
 using LoadWatch.Loads;
 using LoadWatch.People;
@@ -10,6 +11,8 @@ namespace LoadWatch.Anchors;
 public class ObservedAnchorsTests
 {
     private static readonly LocalDate March = new(2026, 3, 1);
+
+    private static readonly EquationChoices Equations = new();
 
     private static readonly Person Someone = Given.Person(birthYear: 1986);
 
@@ -45,7 +48,7 @@ public class ObservedAnchorsTests
     [Fact]
     public void WhatIsAdoptedGoesOnWhenNothingNewIsShown()
     {
-        var observed = ObservedAnchors.Of(Someone, HeartRateMaxEquation.Tanaka, [AllOut("a", 120, 2, 3), AllOut("b", 300, 2, 10), AllOut("c", 720, 2, 17)], [], [], March, March.PlusMonths(30));
+        var observed = ObservedAnchors.Of(Someone, Equations, [AllOut("a", 120, 2, 3), AllOut("b", 300, 2, 10), AllOut("c", 720, 2, 17)], [], [], March, March.PlusMonths(30));
 
         Assert.Equal(3, observed.Count);
     }
@@ -113,9 +116,21 @@ public class ObservedAnchorsTests
         Assert.Equal(expected is null ? [] : [(AnchorKind.HeartRateMax, (double)expected, 3.0)], observed.Select(shown => (shown.Kind, shown.Value, shown.Error)));
     }
 
+    /// <summary>By hand: 220 lies 40 above the 180 of age, a strap's fault at the default of 30 and a maximum where 40 are allowed.</summary>
+    [Theory]
+    [InlineData(30, null)]
+    [InlineData(39, null)]
+    [InlineData(40, 220)]
+    public void HowFarAboveAgeAMaximumMayLieIsSetInTheConfiguration(double above, int? expected) => Assert.Equal(
+        expected,
+        ObservedAnchors.Of(Someone, Equations with { HeartRateAboveEquation = above }, [Heart("a", 220, 3), Heart("b", 220, 10)], [], [], March, March).SingleOrDefault()?.Value);
+
+    [Fact]
+    public void SessionsWithoutHeartRateShowNone() => Assert.Empty(ObservedAnchors.Of(Given.Person(), Equations, [Run("a", 150, 3), Run("b", 150, 10)], [], [], March, March));
+
     [Fact]
     public void WithoutABirthYearNothingElseIsKnown() => Assert.Equal(
-        162, Assert.Single(ObservedAnchors.Of(Given.Person(), HeartRateMaxEquation.Tanaka, [Heart("a", 165, 3), Heart("b", 162, 10)], [], [], March, March)).Value);
+        162, Assert.Single(ObservedAnchors.Of(Given.Person(), Equations, [Heart("a", 165, 3), Heart("b", 162, 10)], [], [], March, March)).Value);
 
     [Fact]
     public void TheSecondBestDateOfAnExerciseOnAMachineCounts()
@@ -125,7 +140,7 @@ public class ObservedAnchorsTests
             Press(2, "press_2", 120), Press(2, "press_2", 118), Press(9, "press_2", 110), Press(16, "press_2", 105), Press(9, "press_1", 140), Press(9, null, 90), Press(16, null, 92),
         ];
 
-        var observed = ObservedAnchors.Of(Someone, HeartRateMaxEquation.Tanaka, [], maxima, [], March, March);
+        var observed = ObservedAnchors.Of(Someone, Equations, [], maxima, [], March, March);
 
         Assert.Equal([(null, 90.0, 9.0), ("press_2", 110, 11)], observed.Select(one => (one.Machine, one.Value, one.Error)));
         Assert.All(observed, one => Assert.Equal((AnchorKind.OneRepetitionMax, "leg_press"), (one.Kind, one.Exercise)));
@@ -138,10 +153,10 @@ public class ObservedAnchorsTests
     public void GoingOnFromAnyMonthIsTheSameAsAllAtOnce() => Gen.Int[4, 12].Sample(month =>
     {
         var cut = new LocalDate(2026, month, 1);
-        var before = ObservedAnchors.Of(Someone, HeartRateMaxEquation.Tanaka, Season(), [], [], March, cut.PlusMonths(-1));
+        var before = ObservedAnchors.Of(Someone, Equations, Season(), [], [], March, cut.PlusMonths(-1));
         var late = Season().Where(session => session.Date >= cut.PlusMonths(-ObservedAnchors.Months)).ToList();
 
-        Assert.Equal(Through(12, Season()), [.. before, .. ObservedAnchors.Of(Someone, HeartRateMaxEquation.Tanaka, late, [], before, cut, new LocalDate(2026, 12, 1))]);
+        Assert.Equal(Through(12, Season()), [.. before, .. ObservedAnchors.Of(Someone, Equations, late, [], before, cut, new LocalDate(2026, 12, 1))]);
     });
 
     private static SessionBests[] Season() =>
@@ -150,9 +165,9 @@ public class ObservedAnchorsTests
         AllOut("f", 120, 5, 3, 270), AllOut("g", 300, 6, 10, 270), AllOut("h", 720, 7, 17, 270), AllOut("i", 300, 9, 2, 300), Run("j", 150, 3), Run("k", 420, 10), Run("l", 1200, 17),
     ];
 
-    private static IReadOnlyList<ObservedAnchor> Of(params SessionBests[] sessions) => ObservedAnchors.Of(Someone, HeartRateMaxEquation.Tanaka, sessions, [], [], March, March);
+    private static IReadOnlyList<ObservedAnchor> Of(params SessionBests[] sessions) => ObservedAnchors.Of(Someone, Equations, sessions, [], [], March, March);
 
-    private static IReadOnlyList<ObservedAnchor> Through(int month, params SessionBests[] sessions) => ObservedAnchors.Of(Someone, HeartRateMaxEquation.Tanaka, sessions, [], [], March, new LocalDate(2026, month, 1));
+    private static IReadOnlyList<ObservedAnchor> Through(int month, params SessionBests[] sessions) => ObservedAnchors.Of(Someone, Equations, sessions, [], [], March, new LocalDate(2026, month, 1));
 
     private static SessionBests AllOut(string key, int seconds, int month, int day, double critical = 250) => new(
         key, new LocalDate(2026, month, day), new Sport("cycling"), Means(Channel.Power, seconds, critical + (18_000.0 / seconds), 100));

@@ -61,6 +61,8 @@ public sealed class ConfigurationMistakesTests
         "loadwatch.json:1: computation.power_bounds: the bounds must rise, the first from above 0")]
     [InlineData("""{ "computation": { "speed_bounds": [-1, 2] } }""",
         "loadwatch.json:1: computation.speed_bounds: the bounds must rise, the first from above 0")]
+    [InlineData("""{ "computation": { "equations": { "heart_rate_above_equation": 61 } } }""",
+        "loadwatch.json:1: computation.equations.heart_rate_above_equation: 61 is outside 10 to 60")]
     [InlineData("""{ "computation": { "equations": { "lucia_weights": [1, 2] } } }""",
         "loadwatch.json:1: computation.equations.lucia_weights: wants 3 numbers from 0 to 100")]
     [InlineData("""{ "computation": { "equations": { "stagno_bounds": [0.6, 0.7, 0.7, 0.8, 0.9] } } }""",
