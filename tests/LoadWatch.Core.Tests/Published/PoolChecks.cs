@@ -10,10 +10,8 @@ internal static class PoolChecks
     private static readonly Source Potvin2017 = new(
         "Potvin and Fuglevand 2017, A motor unit-based model of muscle fatigue, PLoS Comput Biol 13(6):e1005581", Reading.Quoted);
 
-    private static readonly Source Elbow = new("measured in 10 people, as PMC2758423 prints it (authors not noted)", Reading.Read);
-
-    private static readonly Source Staron2000 = new(
-        "Staron et al. 2000, Fiber type composition of the vastus lateralis muscle of young men and women, J Histochem Cytochem 48:623-629", Reading.Computed);
+    private static readonly Source FreyLaw2010 = new(
+        "Frey Law and Avin 2010, Ergonomics 53:109-129, general curve of 194 publications, 21.92 f^-1.98 s, as two pages print its table 2", Reading.Quoted);
 
     public static IReadOnlyList<PublishedCheck> Rows { get; } =
     [
@@ -25,8 +23,8 @@ internal static class PoolChecks
         new("80 % of the maximum is held for", Potvin2017, [14.8], 0.3, "s", () => [Endurance(0.8)]),
         new("fall of a maximal effort over its first 20 s, per second, read off its figure 7", Potvin2017, [1.4], 0.15, "%", () => [(1 - Maximal(20)) * 5]),
         new("left of a maximal effort after 70 s, read off its figure 7", Potvin2017, [50], 2, "%", () => [Maximal(70) * 100]),
-        new("20 % of the maximum held by elbow flexors, 8.2 min, standard deviation 6.2", Elbow, [492], 372, "s", () => [Endurance(0.2)]),
-        new("shares of the maximum at which the medium class, the largest and the last unit join (shares 43/34/23 %)", Staron2000, [0.321, 0.614, 0.7995], 5e-4, "", Thresholds),
+        new("20, 30, 40, 50, 60 % of the maximum are held for (29 % is the narrower bound of the source's 95 % band)", FreyLaw2010, [530.6, 237.8, 134.5, 86.5, 60.3], Tolerance.Share(0.29), "s", () =>
+            [.. new[] { 0.2, 0.3, 0.4, 0.5, 0.6 }.Select(Endurance)]),
     ];
 
     private static double Endurance(double fraction) => FatiguingPool.EnduranceSeconds(fraction, 3600, Pool) ?? double.NaN;
@@ -40,11 +38,5 @@ internal static class PoolChecks
         }
 
         return tired.Capacity;
-    }
-
-    private static double[] Thresholds()
-    {
-        var (slow, medium, _) = ClassShares.Usual.Split(Pool);
-        return [Pool.ForceFractions[slow], Pool.ForceFractions[slow + medium], Pool.ForceFractions[^1]];
     }
 }

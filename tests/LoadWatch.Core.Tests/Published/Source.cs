@@ -9,9 +9,6 @@ public enum Reading
     /// <summary>Read in a page or paper that quotes the source.</summary>
     Quoted,
 
-    /// <summary>Computed by hand, or by another program, from the equation as printed: guards the code, and is no evidence for the equation.</summary>
-    Computed,
-
     /// <summary>Remembered and not read again: no evidence until somebody has.</summary>
     FromMemory,
 }
@@ -24,7 +21,6 @@ public sealed record Source(string Words, Reading Reading)
     {
         Reading.Read => "read",
         Reading.Quoted => "quoted",
-        Reading.Computed => "computed",
         _ => "from memory",
     };
 }

@@ -12,15 +12,11 @@ internal static class StrengthChecks
     private static readonly Source Zourdos2016 = new(
         "Zourdos et al. 2016, Novel resistance training-specific rating of perceived exertion scale, J Strength Cond Res 30:267-275", Reading.Quoted);
 
-    private static readonly Source Epley1985 = new("Epley 1985, Poundage chart; Brzycki 1993, J Phys Educ Recreat Dance 64:88-90", Reading.Computed);
-
     public static IReadOnlyList<PublishedCheck> Rows { get; } =
     [
         new("percent of the maximum that allows 1 to 10 and 12 repetitions", Chart, [100, 95, 93, 90, 87, 85, 83, 80, 77, 75, 70], 1e-6, "%", () =>
             [.. new[] { 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 12 }.Select(repetitions => LoadChart.Share(repetitions)!.Value * 100)]),
         new("repetitions in reserve at hardness 10, 9, 8, 7", Zourdos2016, [0, 1, 2, 3], 0, "", () => [.. new[] { 10, 9, 8, 7 }.Select(Reserve)]),
-        new("maximum from 10 repetitions with 100 kg, by Epley and by Brzycki", Epley1985, [133.33, 133.33], 5e-3, "kg", () =>
-            [100 / OneRepetitionMaxEquation.Epley.Share(10)!.Value, 100 / OneRepetitionMaxEquation.Brzycki.Share(10)!.Value]),
     ];
 
     private static double Reserve(int hardness) =>
