@@ -26,7 +26,7 @@ public static class ActivityComputation
     {
         ArgumentNullException.ThrowIfNull(cut);
         var date = LocalStart.DateOf(cut.Recording, person);
-        var valid = person.HeartRateIsValidOn(date) ? cut : new UsableRecording(WithoutHeartRate(cut.Recording), settings.UsableShareWanted, settings.Quality);
+        var valid = Valid(cut, date, person, settings);
         var usable = UpToMaximum(valid, HeartRateMaximum.On(date, person, anchors), settings.Quality);
         var loads = ActivityLoads.Of(usable, date, person, anchors, settings);
         var stimulus = SessionStimulus.Of(usable, date, person, anchors, settings);
@@ -46,6 +46,19 @@ public static class ActivityComputation
             Remarks = [.. usable.TooLittle.Select(TooLittle), .. loads.Remarks, .. stimulus.Remarks, .. loads.HistogramRemarks],
         };
     }
+
+    /// <summary>The stimulus alone, with what lies between it and the readings.</summary>
+    /// <inheritdoc cref="Compute(UsableRecording, Person, AnchorBook, ComputationSettings)"/>
+    public static SessionStimulus StimulusOf(UsableRecording cut, Person person, AnchorBook anchors, ComputationSettings settings)
+    {
+        ArgumentNullException.ThrowIfNull(cut);
+        var date = LocalStart.DateOf(cut.Recording, person);
+        var usable = UpToMaximum(Valid(cut, date, person, settings), HeartRateMaximum.On(date, person, anchors), settings.Quality);
+        return SessionStimulus.Of(usable, date, person, anchors, settings);
+    }
+
+    private static UsableRecording Valid(UsableRecording cut, LocalDate date, Person person, ComputationSettings settings) =>
+        person.HeartRateIsValidOn(date) ? cut : new UsableRecording(WithoutHeartRate(cut.Recording), settings.UsableShareWanted, settings.Quality);
 
     /// <summary>Without what is too far above the person's maximum; where none is known all of it stays.</summary>
     private static UsableRecording UpToMaximum(UsableRecording cut, HeartRateMaximum? maximum, QualityLimits limits) =>

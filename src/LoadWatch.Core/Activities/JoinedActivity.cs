@@ -31,6 +31,9 @@ public sealed record JoinedActivity
     /// <summary>Legs first.</summary>
     public IReadOnlyList<RegionStimulus> Stimulus { get; init; } = [];
 
+    /// <summary>The sets of the tables that tell of a region, as they were read; empty where no table's sets count.</summary>
+    public IReadOnlyList<ReadSet> Sets { get; init; } = [];
+
     /// <summary>Share of the sampled time with a usable reading, 0 to 1, by channel; empty without a recording.</summary>
     public IReadOnlyDictionary<Channel, double> UsableShare { get; init; } = new Dictionary<Channel, double>();
 

@@ -31,6 +31,7 @@ internal static class JoinedSession
             Quantities = quantities.Quantities,
             StatedBy = quantities.StatedBy,
             Stimulus = regions,
+            Sets = log is null ? [] : SetsOf(log, stated),
             UsableShare = recording?.Values.UsableShare ?? new Dictionary<Channel, double>(),
             Remarks = [.. Remarks(recording, regions), .. log?.Sets!.Remarks ?? [], .. quantities.Remarks, .. NotCounted(session, log)],
             Tables = Sorted(stated.Select(one => one.Layout)),
@@ -53,12 +54,29 @@ internal static class JoinedSession
     }
 
     /// <summary>Regions that only another log of the session tells of come from that one: what one sheet leaves out was done all the same.</summary>
-    private static IReadOnlyList<RegionStimulus> WithOtherRegions(StatedSession log, IReadOnlyList<StatedSession> stated) => [.. stated
+    private static IReadOnlyList<RegionStimulus> WithOtherRegions(StatedSession log, IReadOnlyList<StatedSession> stated) =>
+        [.. Ranked(log, stated).SelectMany(sets => sets.Stimulus).DistinctBy(region => region.Region)];
+
+    /// <summary>Of each log those that tell of a region that no better one tells of.</summary>
+    private static IReadOnlyList<ReadSet> SetsOf(StatedSession log, IReadOnlyList<StatedSession> stated)
+    {
+        var told = new HashSet<BodyRegion>();
+        var sets = new List<ReadSet>();
+        foreach (var one in Ranked(log, stated))
+        {
+            sets.AddRange(one.Read.Where(set => set.Regions.Any(region => !told.Contains(region))));
+            told.UnionWith(one.Stimulus.Select(region => region.Region));
+        }
+
+        return sets;
+    }
+
+    /// <summary>The log that counts first, then by grade.</summary>
+    private static IEnumerable<StatedSets> Ranked(StatedSession log, IReadOnlyList<StatedSession> stated) => stated
         .Where(one => one.Sets is not null)
         .OrderBy(one => one != log)
         .ThenBy(one => StatedSets.GradeOf(one.Sets!.Stimulus))
-        .SelectMany(one => one.Sets!.Stimulus)
-        .DistinctBy(region => region.Region)];
+        .Select(one => one.Sets!);
 
     private static bool HasSets(ActivityValues values) => values.Quantities.Any(quantity => quantity.Name == QuantityNames.Sets);
 

@@ -11,13 +11,15 @@ namespace LoadWatch.Activities;
 /// <param name="Stimulus">Legs first.</param>
 /// <param name="Totals">Sets, repetitions, kilograms.</param>
 /// <param name="Remarks">In plain words.</param>
-internal sealed record StatedSets(int Count, IReadOnlyList<RegionStimulus> Stimulus, IReadOnlyList<Quantity> Totals, IReadOnlyList<string> Remarks)
+/// <param name="Read">How each was read.</param>
+internal sealed record StatedSets(
+    int Count, IReadOnlyList<RegionStimulus> Stimulus, IReadOnlyList<Quantity> Totals, IReadOnlyList<string> Remarks, IReadOnlyList<ReadSet> Read)
 {
     public static StatedSets Of(IReadOnlyList<StrengthSet> work, LocalDate date, Person person, AnchorBook anchors, ComputationSettings settings)
     {
         var stimulus = SessionOfSets.Of(work, date, person, anchors, settings);
         var (totals, remark) = SetTotals.Of(work, settings.Equations.OneRepetitionMaxByRepetitions);
-        return new StatedSets(work.Count, stimulus.Regions, totals, remark is null ? stimulus.Remarks : [.. stimulus.Remarks, remark]);
+        return new StatedSets(work.Count, stimulus.Regions, totals, remark is null ? stimulus.Remarks : [.. stimulus.Remarks, remark], stimulus.Sets);
     }
 
     /// <summary>The poorest grade of the regions; E where nothing could be read.</summary>

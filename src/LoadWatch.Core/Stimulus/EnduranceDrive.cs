@@ -30,6 +30,10 @@ public struct EnduranceDrive
         }
     }
 
+    /// <summary>The least that was left above the critical value so far, J or m; below 0 where more was spent than the variant takes it to be; null where no fatigue
+    /// is seen.</summary>
+    public readonly double? LowestLeft => seesFatigue ? balance.Lowest : null;
+
     /// <summary>True where the drive follows from the intensity alone, whatever was done before.</summary>
     public readonly bool IsFresh(double intensity) => intensity <= critical || !seesFatigue;
 

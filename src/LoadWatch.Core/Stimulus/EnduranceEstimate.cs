@@ -14,6 +14,12 @@ public sealed record EnduranceEstimate(
     /// <summary>The session went through the region, and no channel could tell what it asked for.</summary>
     public static EnduranceEstimate Nothing { get; } = new(Grade.E, StimulusChannels.None, null, null, null, null, []);
 
+    /// <summary>Of power or speed; else null.</summary>
+    public EnduranceSteps? Steps { get; init; }
+
+    /// <summary>By what heart rate was read, for the session or for what a better channel left; else null.</summary>
+    public HeartRateDrive? HeartRate { get; init; }
+
     /// <summary>This one, with the slow and medium classes of what a poorer channel tells of other moments. Bouts and the largest class stay: a poorer channel
     /// knows none.</summary>
     public EnduranceEstimate FilledBy(EnduranceEstimate poorer, long milliseconds) => this with
@@ -21,6 +27,7 @@ public sealed record EnduranceEstimate(
         SlowSeconds = Sum(SlowSeconds, poorer.SlowSeconds),
         MediumSeconds = Sum(MediumSeconds, poorer.MediumSeconds),
         NotSeen = [.. NotSeen, .. EnduranceRemarks.OfFill(Channel, milliseconds)],
+        HeartRate = poorer.HeartRate,
     };
 
     public RegionStimulus For(BodyRegion region, IEnumerable<string> alsoNotSeen) => new(

@@ -28,7 +28,10 @@ internal static class EnduranceReading
                 Bands.Of(low, mid, high, reading => reading.Seconds.Slow),
                 Bands.Of(low, mid, high, reading => reading.Seconds.Medium),
                 limits.Maximum is null ? null : Bands.Of(low, mid, high, reading => reading.Seconds.Large),
-                notSeen);
+                notSeen)
+            {
+                Steps = new EnduranceSteps(limits, variants, mid.LowestLeft, mid.CriticalSeconds, limits.Maximum is null ? null : mid.HardSeconds),
+            };
         }
         finally
         {
@@ -36,7 +39,7 @@ internal static class EnduranceReading
         }
     }
 
-    private static (ClassFractions Seconds, int Bouts) Read(in Readings readings, EnduranceLimits limits, Variant variant, Span<Moment> kept)
+    private static ChannelReading Read(in Readings readings, EnduranceLimits limits, Variant variant, Span<Moment> kept)
     {
         var times = readings.UnixMilliseconds;
         var values = readings.Values;
@@ -44,37 +47,43 @@ internal static class EnduranceReading
         var drive = new EnduranceDrive(limits, variant);
         var bouts = new HardBouts();
         var sum = default(ClassFractions);
+        var (critical, hard) = (0.0, 0.0);
         kept.Clear();
         for (var at = 0; at < values.Length; at++)
         {
             var seconds = UsableSamples.Seconds(milliseconds[at]);
             drive.Advance(times[at], values[at], seconds);
-            var moment = At(values[at], drive, variant.Recruitment, kept);
+            var moment = At(values[at], drive, variant, kept);
             sum += moment.Recruited * seconds;
             bouts.Add(times[at], milliseconds[at], moment.Drive);
+            critical += moment.IsCritical ? seconds : 0;
+            hard += moment.IsHard ? seconds : 0;
         }
 
-        return (sum, bouts.Count);
+        return new ChannelReading(sum, bouts.Count, drive.LowestLeft, critical, hard);
     }
 
-    private static Moment At(double intensity, in EnduranceDrive drive, Recruitment recruitment, Span<Moment> kept)
+    private static Moment At(double intensity, in EnduranceDrive drive, Variant variant, Span<Moment> kept)
     {
         var whole = unchecked((int)intensity);
         if (whole < 0 || whole >= kept.Length || whole != intensity || !drive.IsFresh(intensity))
         {
-            return Moment.Of(drive.At(intensity), recruitment);
+            return Moment.Of(drive.At(intensity), variant);
         }
 
         if (!kept[whole].IsKnown)
         {
-            kept[whole] = Moment.Of(drive.At(intensity), recruitment);
+            kept[whole] = Moment.Of(drive.At(intensity), variant);
         }
 
         return kept[whole];
     }
 
-    private readonly record struct Moment(double Drive, ClassFractions Recruited, bool IsKnown)
+    private readonly record struct Moment(double Drive, ClassFractions Recruited, bool IsCritical, bool IsHard, bool IsKnown)
     {
-        public static Moment Of(double drive, Recruitment recruitment) => new(drive, recruitment.At(drive), IsKnown: true);
+        public static Moment Of(double drive, Variant variant) =>
+            new(drive, variant.Recruitment.At(drive), HardLine.Reached(drive, variant.CriticalDrive), HardLine.Reached(drive), IsKnown: true);
     }
+
+    private readonly record struct ChannelReading(ClassFractions Seconds, int Bouts, double? LowestLeft, double CriticalSeconds, double HardSeconds);
 }

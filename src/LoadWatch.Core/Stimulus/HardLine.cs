@@ -8,5 +8,8 @@ public static class HardLine
     public const double Drive = 0.70;
 
     /// <summary>Compared after rounding to 9 digits, so that a drive that is 0.70 by hand is 0.70 here.</summary>
-    public static bool Reached(double drive) => drive > Drive - 1e-6 && Math.Round(drive, 9) >= Drive;
+    public static bool Reached(double drive) => Reached(drive, Drive);
+
+    /// <summary>The same of another line.</summary>
+    public static bool Reached(double drive, double line) => drive > line - 1e-6 && Math.Round(drive, 9) >= line;
 }

@@ -17,12 +17,15 @@ public sealed record HeartRateDrive(HeartRateReserve Reserve, double Threshold, 
     private const double UsualThreshold = 0.85;
     private const int SmoothingMilliseconds = 15_000;
 
+    /// <summary>Whether an anchored threshold tells x2.</summary>
+    public bool IsAnchored { get; init; }
+
     /// <summary>An anchored threshold outside the reserve is not used.</summary>
     public static HeartRateDrive On(LocalDate date, string person, AnchorBook anchors, HeartRateReserve reserve)
     {
         var anchor = anchors.On(date, person, AnchorKind.HeartRateVt2);
         return anchor is not null && reserve.Unclamped(anchor.Value) is > 0 and <= 1 and var threshold
-            ? new HeartRateDrive(reserve, threshold, CapacityError.Of(reserve.Estimated ? AnchorSource.Estimated : anchor.Source))
+            ? new HeartRateDrive(reserve, threshold, CapacityError.Of(reserve.Estimated ? AnchorSource.Estimated : anchor.Source)) { IsAnchored = true }
             : new HeartRateDrive(reserve, UsualThreshold, CapacityError.Population);
     }
 

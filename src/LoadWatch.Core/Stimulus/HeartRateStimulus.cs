@@ -35,7 +35,10 @@ public static class HeartRateStimulus
             Bands.Of(low, mid, high, reading => reading.Slow),
             Bands.Of(low, mid, high, reading => reading.Medium),
             LargeSeconds: null,
-            [EnduranceRemarks.OfHeartRate]);
+            [EnduranceRemarks.OfHeartRate])
+        {
+            HeartRate = drive,
+        };
     }
 
     private static ClassFractions Read(ReadOnlySpan<double> fractions, ReadOnlySpan<int> milliseconds, HeartRateDrive drive, Variant variant)

@@ -25,7 +25,7 @@ public static class SessionOfSets
         ComputationSettings settings)
     {
         var exercises = settings.Exercises;
-        var placed = work.Take(MostSets).Select(set => Place(set, SetDemand.Of(set, date, person.Id, anchors, settings.Equations), exercises)).ToList();
+        var placed = work.Take(MostSets).Select(set => Read(set, SetDemand.Of(set, date, person.Id, anchors, settings.Equations), exercises)).ToList();
         var unplaced = placed.FindAll(set => set.Regions.Count == 0);
         var notPlaced = NotPlaced(unplaced, work.Count - placed.Count).ToList();
         var elsewhere = unplaced.Count + work.Count - placed.Count;
@@ -34,35 +34,35 @@ public static class SessionOfSets
             .Select(region => (Region: region, Sets: placed.FindAll(set => set.Regions.Contains(region))))
             .Where(group => group.Sets.Count + elsewhere > 0)
             .Select(group => OfRegion(group.Region, group.Sets, elsewhere, notPlaced, variants));
-        return new SessionStimulus([.. regions], notPlaced) { Questions = UnknownExercises.Of(work, exercises) };
+        return new SessionStimulus([.. regions], notPlaced) { Questions = UnknownExercises.Of(work, exercises), Sets = placed };
     }
 
     /// <summary>Sets whose region is not known may have gone through this one.</summary>
-    private static RegionStimulus OfRegion(BodyRegion region, List<PlacedSet> sets, int elsewhere, List<string> notPlaced, Variants variants)
+    private static RegionStimulus OfRegion(BodyRegion region, List<ReadSet> sets, int elsewhere, List<string> notPlaced, Variants variants)
     {
         var demands = Demands(sets);
         return SetStimulus.Of(region, demands, sets.Count - demands.Count + elsewhere, [.. Missing(sets), .. NearMaximal(sets), .. notPlaced], variants);
     }
 
-    private static PlacedSet Place(
+    private static ReadSet Read(
         StrengthSet set, (SetDemand? Demand, string? Missing) reading, IReadOnlyDictionary<string, IReadOnlyList<BodyRegion>> exercises) =>
-        new(ExerciseWord.Canonical(set.Exercise), UnknownExercises.RegionsOf(set.Exercise, exercises), reading);
+        new(set, UnknownExercises.RegionsOf(set.Exercise, exercises), reading.Demand, reading.Missing);
 
-    private static List<SetDemand> Demands(IEnumerable<PlacedSet> sets) => [.. sets.Select(set => set.Reading.Demand).OfType<SetDemand>()];
+    private static List<SetDemand> Demands(IEnumerable<ReadSet> sets) => [.. sets.Select(set => set.Demand).OfType<SetDemand>()];
 
     /// <summary><c>3 sets of squat: no one_repetition_max, or ...</c>.</summary>
-    private static IEnumerable<string> Missing(IEnumerable<PlacedSet> sets) => sets
-        .Where(set => set.Reading.Missing is not null)
-        .GroupBy(set => (set.Exercise, set.Reading.Missing))
+    private static IEnumerable<string> Missing(IEnumerable<ReadSet> sets) => sets
+        .Where(set => set.Missing is not null)
+        .GroupBy(set => (set.Exercise, set.Missing))
         .Select(group => $"{Counted(group.Count())} of {group.Key.Exercise}: no {group.Key.Missing}");
 
     /// <summary>Of sets that could not be read: said where the exercise is one that may be near the maximum of a frail person.</summary>
-    private static IEnumerable<string> NearMaximal(IEnumerable<PlacedSet> sets) =>
-        sets.Any(set => set.Reading.Demand is null && StandingAndStairs.Contains(set.Exercise ?? ""))
+    private static IEnumerable<string> NearMaximal(IEnumerable<ReadSet> sets) =>
+        sets.Any(set => set.Demand is null && StandingAndStairs.Contains(set.Exercise ?? ""))
             ? ["chair stands, steps and stairs may be near the maximum of a frail person: a hardness or repetitions in reserve would tell"]
             : [];
 
-    private static IEnumerable<string> NotPlaced(List<PlacedSet> unplaced, int beyond) => unplaced
+    private static IEnumerable<string> NotPlaced(List<ReadSet> unplaced, int beyond) => unplaced
         .GroupBy(set => set.Exercise, StringComparer.Ordinal)
         .Select(group => group.Key is null
             ? $"{Counted(group.Count())} without an exercise: which body region?"
@@ -70,6 +70,4 @@ public static class SessionOfSets
         .Concat(beyond > 0 ? [$"{Counted(beyond)} beyond the first {MostSets} not read"] : []);
 
     private static string Counted(int sets) => sets == 1 ? "1 set" : $"{sets} sets";
-
-    private sealed record PlacedSet(string? Exercise, IReadOnlyList<BodyRegion> Regions, (SetDemand? Demand, string? Missing) Reading);
 }

@@ -16,6 +16,15 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
     /// <summary>Exercises of working sets that no body region is known for, in canonical form: to be asked for once, over all people.</summary>
     public IReadOnlyList<string> Questions { get; init; } = [];
 
+    /// <summary>How each working set was read, in their order; empty without sets.</summary>
+    public IReadOnlyList<ReadSet> Sets { get; init; } = [];
+
+    /// <summary>What lies between power or speed and what they tell; null where neither was read.</summary>
+    public EnduranceSteps? Endurance { get; init; }
+
+    /// <summary>By what heart rate was read; null where it was not.</summary>
+    public HeartRateDrive? HeartRate { get; init; }
+
     public static SessionStimulus Of(
         UsableRecording usable, LocalDate date, Person person, AnchorBook anchors, ComputationSettings settings)
     {
@@ -27,7 +36,7 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
         }
 
         var sets = SessionOfSets.Of(work, date, person, anchors, settings);
-        return sets with { Regions = SetsAndChannels.Best(sets.Regions, channels.Regions) };
+        return channels with { Regions = SetsAndChannels.Best(sets.Regions, channels.Regions), Remarks = sets.Remarks, Questions = sets.Questions, Sets = sets.Sets };
     }
 
     /// <summary>Where speed is a body's own running or walking, and power a watch's model of it.</summary>
@@ -47,7 +56,7 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
         {
             var notSeen = EnduranceRemarks.OfSession(usable, power, speed).ToList();
             var estimate = EnduranceChannels.Of(usable, power, speed, date, person, anchors);
-            return new SessionStimulus([.. regions.Select(region => estimate.For(region, notSeen))], []);
+            return new SessionStimulus([.. regions.Select(region => estimate.For(region, notSeen))], []) { Endurance = estimate.Steps, HeartRate = estimate.HeartRate };
         }
 
         var question = SportRegions.Question(sport);
@@ -56,6 +65,10 @@ public sealed record SessionStimulus(IReadOnlyList<RegionStimulus> Regions, IRea
             : EnduranceEstimate.Nothing;
         return new SessionStimulus(
             [.. BodyRegions.All.Select(region => (region == BodyRegion.Legs ? legs : EnduranceEstimate.Nothing).For(region, [question]))],
-            [question]);
+            [question])
+        {
+            Endurance = legs.Steps,
+            HeartRate = legs.HeartRate,
+        };
     }
 }

@@ -23,6 +23,7 @@ public struct WPrimeBalance
     private readonly double whole;
     private readonly double wattsPerUnit;
     private double spent;
+    private double mostSpent;
     private double recovering;
     private double intensity;
     private double standing;
@@ -40,6 +41,9 @@ public struct WPrimeBalance
     /// <summary>The balance at the time of the reading gone on to, before its own work; below 0 when more was spent than the anchors allow.</summary>
     public readonly double Left => whole - (recovering == 0 ? spent : spent * Math.Exp(-recovering));
 
+    /// <summary>The least that was left up to the end of the reading gone on to, its own work included.</summary>
+    public readonly double Lowest => whole - Math.Max(mostSpent, intensity > critical ? Worked() : 0);
+
     /// <summary>Goes on to the next reading; times must not run backwards.</summary>
     /// <param name="seconds">How long it stands for.</param>
     public void Advance(long unixMilliseconds, double intensity, double seconds)
@@ -54,7 +58,8 @@ public struct WPrimeBalance
     {
         if (intensity > critical)
         {
-            spent = (spent * Math.Exp(-recovering)) + ((intensity - critical) * standing);
+            spent = Worked();
+            mostSpent = Math.Max(mostSpent, spent);
             recovering = 0;
         }
         else if (intensity < critical && spent > 0)
@@ -67,6 +72,9 @@ public struct WPrimeBalance
             recovering += (apart - standing) * Rate(critical * wattsPerUnit);
         }
     }
+
+    /// <summary>What is spent when the reading gone on to has been worked, above critical power.</summary>
+    private readonly double Worked() => (spent * Math.Exp(-recovering)) + ((intensity - critical) * standing);
 
     /// <summary>1 / tau, per second.</summary>
     private static double Rate(double belowWatts)

@@ -4,6 +4,7 @@ using LoadWatch.People;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Explain;
 using LoadWatch.Storage;
+using LoadWatch.Storage.Archives;
 using NodaTime;
 
 namespace LoadWatch.Service.Commands;
@@ -34,12 +35,12 @@ public static class ExplainCommand
         {
             var asked = new Asked(parsed.GetValue(subject)!, parsed.GetValue(date), parsed.GetValue(time), parsed.GetValue(rule), parsed.GetValue(anchor));
             using var workplace = Workplace.OpenToRead(parsed.GetValue(config)!);
-            return workplace.Store.Read(session => Run(workplace.Configuration, session, asked));
+            return workplace.Store.Read(session => Run(workplace.Configuration, new Archive(workplace.Folder), session, asked));
         });
         return command;
     }
 
-    private static int Run(WorkingConfiguration configuration, StoreSession session, Asked asked)
+    private static int Run(WorkingConfiguration configuration, Archive archive, StoreSession session, Asked asked)
     {
         if (asked.IsOfPerson && !configuration.People.ContainsKey(asked.Subject))
         {
@@ -56,7 +57,7 @@ public static class ExplainCommand
             return Refuse($"\"{rule}\" is no rule{Nearest.Hint(rule, RuleBook.All.Select(one => one.Name))}");
         }
 
-        if (Text(configuration, session, asked) is { } text)
+        if (Text(configuration, archive, session, asked) is { } text)
         {
             Console.Out.WriteLine(text);
             return ExitCode.Ok;
@@ -67,14 +68,14 @@ public static class ExplainCommand
             : $"\"{asked.Subject}\" is no alert, person, session or file known here{Nearest.Hint(asked.Subject, configuration.People.Keys)}");
     }
 
-    private static string? Text(WorkingConfiguration configuration, StoreSession session, Asked asked) => asked switch
+    private static string? Text(WorkingConfiguration configuration, Archive archive, StoreSession session, Asked asked) => asked switch
     {
         { Anchor: { } kind } => AnchorExplanation.Of(configuration, session, asked.Subject, kind, asked.Date),
         { Rule: { } rule } => FindingExplanation.Of(configuration, session, asked.Subject, rule, asked.Date),
-        { Time: { } time } => SessionExplanation.Of(configuration, session, asked.Subject, asked.Date, time),
+        { Time: { } time } => SessionExplanation.Of(configuration, archive, session, asked.Subject, asked.Date, time),
         _ => AlertExplanation.Of(session, asked.Subject)
             ?? DayExplanation.Of(configuration, session, asked.Subject, asked.Date)
-            ?? SessionExplanation.Of(configuration, session, asked.Subject)
+            ?? SessionExplanation.Of(configuration, archive, session, asked.Subject)
             ?? FileExplanation.Of(session, asked.Subject),
     };
 

@@ -51,15 +51,17 @@ public sealed record QuantityFormula(string Formula, string Source)
         _ => null,
     };
 
-    private static QuantityFormula OfMaximum(OneRepetitionMaxEquation equation) => new(
-        "kilograms / the share of the maximum that repetitions done and in reserve let expect, the highest of the sets",
-        equation switch
-        {
-            OneRepetitionMaxEquation.Epley => "1 + r / 30: Epley 1985, Poundage chart",
-            OneRepetitionMaxEquation.Brzycki => "36 / (37 - r): Brzycki 1993, J Phys Educ Recreat Dance 64:88-90",
-            OneRepetitionMaxEquation.Lander => "100 / (101.3 - 2.67123 r): Lander 1985 (from memory)",
-            OneRepetitionMaxEquation.Mayhew => "100 / (52.2 + 41.9 exp(-0.055 r)): Mayhew et al. 1992",
-            OneRepetitionMaxEquation.Wathan => "100 / (48.8 + 53.8 exp(-0.075 r)): Wathan 1994, Load assignment",
-            _ => "the training load chart of the National Strength and Conditioning Association",
-        });
+    private static QuantityFormula OfMaximum(OneRepetitionMaxEquation equation) =>
+        new("kilograms / the share of the maximum that repetitions done and in reserve let expect, the highest of the sets", SourceOf(equation));
+
+    /// <summary>Of the share of the maximum that so many repetitions to failure let expect.</summary>
+    public static string SourceOf(OneRepetitionMaxEquation equation) => equation switch
+    {
+        OneRepetitionMaxEquation.Epley => "1 + r / 30: Epley 1985, Poundage chart",
+        OneRepetitionMaxEquation.Brzycki => "36 / (37 - r): Brzycki 1993, J Phys Educ Recreat Dance 64:88-90",
+        OneRepetitionMaxEquation.Lander => "100 / (101.3 - 2.67123 r): Lander 1985 (from memory)",
+        OneRepetitionMaxEquation.Mayhew => "100 / (52.2 + 41.9 exp(-0.055 r)): Mayhew et al. 1992",
+        OneRepetitionMaxEquation.Wathan => "100 / (48.8 + 53.8 exp(-0.075 r)): Wathan 1994, Load assignment",
+        _ => "the training load chart of the National Strength and Conditioning Association",
+    };
 }

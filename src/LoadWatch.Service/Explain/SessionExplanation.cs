@@ -11,6 +11,7 @@ using LoadWatch.Service.Pipeline;
 using LoadWatch.Stimulus;
 using LoadWatch.Storage;
 using LoadWatch.Storage.Activities;
+using LoadWatch.Storage.Archives;
 using NodaTime;
 
 namespace LoadWatch.Service.Explain;
@@ -19,29 +20,30 @@ namespace LoadWatch.Service.Explain;
 public sealed class SessionExplanation
 {
     private readonly WorkingConfiguration configuration;
+    private readonly Archive archive;
     private readonly StoreSession session;
     private readonly Person person;
     private readonly TableBasis basis;
     private readonly StringBuilder text = new();
 
-    private SessionExplanation(WorkingConfiguration configuration, StoreSession session, Person person)
+    private SessionExplanation(WorkingConfiguration configuration, Archive archive, StoreSession session, Person person)
     {
-        (this.configuration, this.session, this.person) = (configuration, session, person);
+        (this.configuration, this.archive, this.session, this.person) = (configuration, archive, session, person);
         basis = TableBasis.Of(configuration, session);
     }
 
     /// <summary>By the id that a day shows; null where no recording leads a session of that id.</summary>
-    public static string? Of(WorkingConfiguration configuration, StoreSession session, string id) =>
+    public static string? Of(WorkingConfiguration configuration, Archive archive, StoreSession session, string id) =>
         session.Activities.Get(id) is { } stored && configuration.People.TryGetValue(stored.Winner.Person, out var person)
-            ? new SessionExplanation(configuration, session, person).Write(stored.Date, (activity, _) => activity.Key == id)
+            ? new SessionExplanation(configuration, archive, session, person).Write(stored.Date, (activity, _) => activity.Key == id)
             : null;
 
     /// <summary>Every session of the person that runs at a time of a date, else those whose time nothing tells; null without any, or where the person is unknown.</summary>
     /// <param name="date">Null: the last computed day.</param>
     /// <param name="time">By the clock of the session.</param>
-    public static string? Of(WorkingConfiguration configuration, StoreSession session, string person, LocalDate? date, LocalTime time) =>
+    public static string? Of(WorkingConfiguration configuration, Archive archive, StoreSession session, string person, LocalDate? date, LocalTime time) =>
         configuration.People.TryGetValue(person, out var known) && (date ?? LastDay.Of(session, known.Id)?.Date) is { } on
-            ? new SessionExplanation(configuration, session, known).At(on, time)
+            ? new SessionExplanation(configuration, archive, session, known).At(on, time)
             : null;
 
     private string? At(LocalDate date, LocalTime time) =>
@@ -90,7 +92,8 @@ public sealed class SessionExplanation
             Line($"rows of the table {OneLine.Of(table)}");
         }
 
-        var anchors = AnchorsOf(activity);
+        var stimulus = StimulusOf(activity, recorded);
+        var anchors = AnchorsOf(activity, stimulus.Exercises);
         Head("reference values");
         AppendAnchors(activity, anchors);
         Head("quantities");
@@ -98,19 +101,27 @@ public sealed class SessionExplanation
         AppendLoad(activity);
         AppendZones(recorded);
         Head("what it asked of the muscles");
-        AppendStimulus(activity);
+        stimulus.Append(text);
         Head("measured and assumed");
-        AppendEvidence(activity, anchors);
+        AppendEvidence(activity, anchors, stimulus);
         Head("not seen, or not known");
-        var open = activity.Remarks.Concat(activity.Stimulus.SelectMany(region => region.NotSeen)).Distinct(StringComparer.Ordinal).ToList();
-        foreach (var remark in open.DefaultIfEmpty("nothing that LoadWatch would ask for"))
+        foreach (var remark in activity.Remarks.Distinct(StringComparer.Ordinal).Concat(NotSeen(activity)).DefaultIfEmpty("nothing that LoadWatch would ask for"))
         {
             Line(OneLine.Of(remark));
         }
     }
 
+    /// <summary>With the regions where it is not of all that the session went through.</summary>
+    private static IEnumerable<string> NotSeen(JoinedActivity activity) => activity.Stimulus
+        .SelectMany(region => region.NotSeen.Select(remark => (Remark: remark, region.Region)))
+        .Distinct()
+        .Where(one => !activity.Remarks.Contains(one.Remark))
+        .GroupBy(one => one.Remark, one => BodyRegions.Word(one.Region), StringComparer.Ordinal)
+        .Select(same => same.Count() == activity.Stimulus.Count ? same.Key : $"{string.Join(", ", same)}: {same.Key}");
+
     /// <summary>Those that are read of a session of its channels and its sport.</summary>
-    private List<Anchor> AnchorsOf(JoinedActivity activity)
+    /// <param name="exercises">Of its sets; empty: any.</param>
+    private List<Anchor> AnchorsOf(JoinedActivity activity, IReadOnlyCollection<string> exercises)
     {
         var book = basis.AnchorsOf(person);
         IEnumerable<AnchorKind> kinds =
@@ -124,7 +135,7 @@ public sealed class SessionExplanation
         [
             .. kinds.Select(kind => book.On(activity.Date, person.Id, kind)).OfType<Anchor>(),
             .. MaximaOf(activity)?.Read ?? [],
-            .. activity[QuantityNames.Sets] is null ? [] : Maxima(book, activity.Date),
+            .. activity[QuantityNames.Sets] is null ? [] : Maxima(book, activity.Date, exercises),
         ];
     }
 
@@ -151,8 +162,9 @@ public sealed class SessionExplanation
 
     private static bool ReadsSpeed(Sport sport) => sport.IsOnFoot || sport.IsTeamSport;
 
-    private IEnumerable<Anchor> Maxima(AnchorBook book, LocalDate date) => book.Of(person.Id)
+    private IEnumerable<Anchor> Maxima(AnchorBook book, LocalDate date, IReadOnlyCollection<string> exercises) => book.Of(person.Id)
         .Where(anchor => anchor.Kind == AnchorKind.OneRepetitionMax && !(anchor.Date > date))
+        .Where(anchor => exercises.Count == 0 || exercises.Contains(ExerciseWord.Canonical(anchor.Exercise)))
         .Select(anchor => book.On(date, person.Id, anchor.Kind, anchor.Exercise, anchor.Machine)!)
         .Distinct()
         .OrderBy(anchor => anchor.Exercise, StringComparer.Ordinal).ThenBy(anchor => anchor.Machine, StringComparer.Ordinal);
@@ -247,22 +259,13 @@ public sealed class SessionExplanation
         }
     }
 
-    private void AppendStimulus(JoinedActivity activity)
+    private StimulusText StimulusOf(JoinedActivity activity, StoredActivity? recorded)
     {
-        SessionText.AppendStimulus(text, activity, withNotSeen: false);
-        foreach (var way in activity.Stimulus.Select(region => region.Channel).Distinct(StringComparer.Ordinal).Select(StimulusFormula.Of).OfType<StimulusFormula>())
-        {
-            Below($"formula  {way.Formula}");
-            Below($"source   {way.Source}");
-        }
-
-        if (activity.Stimulus.Any(region => region.SeesHardWork))
-        {
-            Below(StimulusFormula.HeavyOrFast);
-        }
+        var archived = recorded is null ? null : ArchivedSession.Stimulus(configuration, archive, session, basis, person, recorded.Merge);
+        return new StimulusText(activity, archived, isUnreadable: recorded is not null && archived is null, configuration.Computation.Equations, person.AgeOn(activity.Date));
     }
 
-    private void AppendEvidence(JoinedActivity activity, List<Anchor> anchors)
+    private void AppendEvidence(JoinedActivity activity, List<Anchor> anchors, StimulusText stimulus)
     {
         var measured = activity.UsableShare.Keys.Order().Select(ChannelWords.Of).Concat(anchors.Where(anchor => anchor.Source == AnchorSource.Measured).Select(Name)).ToList();
         Line($"measured, or stated as such: {(measured.Count == 0 ? "nothing" : string.Join(", ", measured))}");
@@ -284,7 +287,7 @@ public sealed class SessionExplanation
             Line($"grade {grade}: {StimulusFormula.Of(grade)}");
         }
 
-        foreach (var assumption in activity.Stimulus.Select(region => region.Channel).Distinct(StringComparer.Ordinal).SelectMany(channel => StimulusFormula.Assumptions(channel, person.AgeOn(activity.Date))).Distinct(StringComparer.Ordinal))
+        foreach (var assumption in stimulus.Assumptions())
         {
             Line($"assumed: {assumption}");
         }

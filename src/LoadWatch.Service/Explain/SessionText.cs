@@ -47,7 +47,7 @@ internal static class SessionText
     {
         foreach (var stimulus in activity.Stimulus)
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    {BodyRegions.Word(stimulus.Region)} from {stimulus.Channel}, grade {stimulus.Grade}: hard bouts {OfBand(stimulus.HardBouts)}, hard repetitions {OfBand(stimulus.HardRepetitions)}, seconds of the slow class {OfBand(stimulus.SlowSeconds)}, medium {OfBand(stimulus.MediumSeconds)}, largest {OfBand(stimulus.LargeSeconds)}");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    {BodyRegions.Word(stimulus.Region)} from {stimulus.Channel}, grade {stimulus.Grade}: {HardWork(stimulus)}, seconds of the slow class {OfBand(stimulus.SlowSeconds)}, medium {OfBand(stimulus.MediumSeconds)}, largest {OfBand(stimulus.LargeSeconds)}");
             foreach (var missing in withNotSeen ? stimulus.NotSeen : [])
             {
                 text.AppendLine(CultureInfo.InvariantCulture, $"        not seen: {OneLine.Of(missing)}");
@@ -69,6 +69,15 @@ internal static class SessionText
             var (sha, part) = RecordingKey.Parse(contribution.Key);
             text.AppendLine(CultureInfo.InvariantCulture, $"    recording {part} of {ContributionText.FileOf(session, sha)}: {ContributionText.Of(session, recorded.Merge, contribution)}");
         }
+    }
+
+    /// <summary>Sets have repetitions, and bouts where one of them was held; every other channel has bouts alone.</summary>
+    private static string HardWork(RegionStimulus stimulus)
+    {
+        var (bouts, repetitions) = ($"hard bouts {OfBand(stimulus.HardBouts)}", $"hard repetitions {OfBand(stimulus.HardRepetitions)}");
+        return stimulus.Channel != StimulusChannels.Sets ? bouts
+            : stimulus.HardBouts is null ? repetitions
+            : $"{bouts}, {repetitions}";
     }
 
     private static string OfBand(Band? band) => band is { } known

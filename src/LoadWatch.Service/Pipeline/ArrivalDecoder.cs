@@ -8,6 +8,7 @@ using LoadWatch.Rows;
 using LoadWatch.Service.Arrivals;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
+using LoadWatch.Stimulus;
 using LoadWatch.Storage.Archives;
 using LoadWatch.Storage.Recordings;
 using NodaTime;
@@ -234,6 +235,10 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
     /// <summary>Everything computed from a recording of a person of the roster: of the part within the planned session, where the plan has its time.</summary>
     public ActivityValues Values(Recording recording, string person, TableBasis basis) => Values(Cut(recording), configuration.People[person], basis);
 
+    /// <summary>The stimulus as <see cref="Values(Recording, string, TableBasis)"/> has it, with what lies between.</summary>
+    public SessionStimulus StimulusOf(Recording recording, Person person, TableBasis basis) =>
+        ActivityComputation.StimulusOf(Counted(Cut(recording), person, basis).Usable, person, AnchorsOf(recording, person, basis), configuration.Computation);
+
     /// <summary>Makes one recording of those of an activity, each by the quality cuts of the configuration; null where none gives anything.</summary>
     public Recording? Merged(SessionPlan plan, IReadOnlyDictionary<string, Recording> recordings) =>
         MergedSession.Of(plan, recordings, configuration.Computation.Quality);
@@ -262,17 +267,23 @@ public sealed class ArrivalDecoder(WorkingConfiguration configuration, DecoderSe
 
     private ActivityValues Values(UsableRecording usable, Person person, TableBasis basis)
     {
-        var recording = usable.Recording;
-        var date = LocalStart.DateOf(recording, person);
-        var (planned, anchors) = (basis.Planned(person, date), basis.AnchorsOf(person, date));
-        var cut = SessionWindow.Of(recording, planned) is { } window ? RecordingCut.To(recording, window.Start, window.End) : CutRecording.Nothing(recording);
-        var values = cut.LeftOut.Count == 0
-            ? ActivityComputation.Compute(usable, person, anchors, configuration.Computation)
-            : ActivityComputation.Compute(cut.Recording, person, anchors, configuration.Computation);
-        IReadOnlyList<string> missing = recording.CutOff is { } reason ? [$"only its beginning is used: {reason}"] : [];
+        var (counted, cut) = Counted(usable, person, basis);
+        var values = ActivityComputation.Compute(counted, person, AnchorsOf(usable.Recording, person, basis), configuration.Computation);
+        IReadOnlyList<string> missing = usable.Recording.CutOff is { } reason ? [$"only its beginning is used: {reason}"] : [];
         return cut.LeftOut.Count + missing.Count == 0
             ? values
             : values with { Remarks = [.. missing, .. cut.LeftOut, .. values.Remarks], Cuts = [.. cut.Cuts, .. values.Cuts] };
+    }
+
+    private static AnchorBook AnchorsOf(Recording recording, Person person, TableBasis basis) => basis.AnchorsOf(person, LocalStart.DateOf(recording, person));
+
+    /// <summary>The part within the planned session.</summary>
+    private (UsableRecording Usable, CutRecording Cut) Counted(UsableRecording usable, Person person, TableBasis basis)
+    {
+        var recording = usable.Recording;
+        var planned = basis.Planned(person, LocalStart.DateOf(recording, person));
+        var cut = SessionWindow.Of(recording, planned) is { } window ? RecordingCut.To(recording, window.Start, window.End) : CutRecording.Nothing(recording);
+        return (cut.LeftOut.Count == 0 ? usable : Cut(cut.Recording), cut);
     }
 
     private static ArrivalVerdict ContainerVerdict(ArrivalContent content) => (content.Members, content.Problems.Count) switch

@@ -92,6 +92,45 @@ public class ChannelsTests
             },
             iter: 300);
 
+    /// <summary>
+    /// By hand: 100 s at 350 W spend 10 kJ of 20. With b left of W' the drive is 0.65 + 0.35 x 100 / (750 b), 0.70 from b = 0.9333 on, so from the 14th second on.
+    /// 5 m/s of critical 4 m/s, maximum 8, D' 200 m: 0.65 + 0.35 / (4 b), above 0.70 from the first second on.
+    /// </summary>
+    [Fact]
+    public void WhatLiesBetweenIsKept()
+    {
+        var ride = Session(Given.Recording("cycling", Given.EverySecond((Channel.Power, Given.Steps((350, 100), (100, 600))))), Everything);
+        var run = Session(Given.Recording("running", Given.EverySecond((Channel.Speed, Given.Steps((5, 100), (2, 600))))), Everything);
+
+        Assert.Equal(10_000, ride.Endurance!.LowestLeft!.Value, 1e-6);
+        Assert.Equal((100, 86), (ride.Endurance.CriticalSeconds, ride.Endurance.HardSeconds));
+        Assert.Equal(100, run.Endurance!.LowestLeft!.Value, 1e-6);
+        Assert.Equal((100, 100), (run.Endurance.CriticalSeconds, run.Endurance.HardSeconds));
+        Assert.True(ride is { HeartRate: null, Sets: [] });
+    }
+
+    /// <summary>Exactly at critical power counts as there; without a maximum nobody knows what is hard, nor what is left.</summary>
+    [Fact]
+    public void WithoutATrueMaximumTheTimeAtCriticalPowerIsStillKnown()
+    {
+        Anchor[] anchors = [.. Everything.Where(one => one.Kind != AnchorKind.PowerMax)];
+        var steps = Session(Given.Recording("cycling", Given.EverySecond((Channel.Power, Given.Steps((250, 60), (249, 60), (300, 60))))), anchors).Endurance!;
+
+        Assert.Equal(120, steps.CriticalSeconds);
+        Assert.True(steps is { HardSeconds: null, LowestLeft: null });
+    }
+
+    [Theory]
+    [InlineData(true, 0.85, 0.02)]
+    [InlineData(false, 0.85, 0.2)]
+    public void HeartRateKeepsByWhichThresholdItWasRead(bool isAnchored, double threshold, double error)
+    {
+        Anchor[] anchors = [.. Everything.Where(one => isAnchored || one.Kind != AnchorKind.HeartRateVt2)];
+        var drive = Session(Given.Recording("rowing", Given.EverySecond((Channel.HeartRate, Given.Steps((120, 60))))), anchors).HeartRate!;
+
+        Assert.Equal((isAnchored, threshold, error), (drive.IsAnchored, Math.Round(drive.Threshold, 9), drive.RelativeError));
+    }
+
     /// <summary>By hand: 600 s of power, then 400 s of heart rate alone, 145 bpm being 0.8 of the second threshold's part as 200 W are of critical power.</summary>
     [Fact]
     public void HeartRateTellsWhatPowerLeaves()
@@ -179,6 +218,8 @@ public class ChannelsTests
     private static RegionStimulus Of(string sport, Anchor[] anchors, params (Channel Channel, double[] Values)[] columns) =>
         Of(Given.Recording(sport, Given.EverySecond(columns)), anchors, birthYear: null);
 
-    private static RegionStimulus Of(Recording recording, Anchor[] anchors, int? birthYear) => Assert.Single(SessionStimulus.Of(
-        new UsableRecording(recording, 0.5), Given.Date, Given.Person(birthYear: birthYear), Given.Anchors(anchors), new ComputationSettings()).Regions);
+    private static RegionStimulus Of(Recording recording, Anchor[] anchors, int? birthYear) => Assert.Single(Session(recording, anchors, birthYear).Regions);
+
+    private static SessionStimulus Session(Recording recording, Anchor[] anchors, int? birthYear = null) => SessionStimulus.Of(
+        new UsableRecording(recording, 0.5), Given.Date, Given.Person(birthYear: birthYear), Given.Anchors(anchors), new ComputationSettings());
 }

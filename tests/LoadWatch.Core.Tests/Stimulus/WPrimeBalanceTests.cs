@@ -40,6 +40,27 @@ public class WPrimeBalanceTests
         Assert.Equal(20_000 - (1000 * Math.Exp(-10 / 325.1756) * Math.Exp(-590 / 267.2240)), balances[2], 1e-2);
     }
 
+    /// <summary>By hand from the balances above: 15 010.9585 J after a rest, less 100 s and then 10 s more of 100 W above critical power; what comes back later changes nothing of it.</summary>
+    [Fact]
+    public void TheLowestBalanceHoldsTheWorkOfTheLastReadingToo()
+    {
+        var balance = new WPrimeBalance(250, 20_000);
+        foreach (var sample in Given.Samples((350, 60), (150, 60), (350, 100)))
+        {
+            balance.Advance(sample.UnixMilliseconds, sample.Value, sample.Milliseconds / 1000.0);
+        }
+
+        Assert.Equal(5_010.9585, balance.Lowest, 1e-3);
+
+        balance.Advance(Given.StartMilliseconds + 220_000, 350, 10);
+        Assert.Equal(4_010.9585, balance.Lowest, 1e-3);
+
+        balance.Advance(Given.StartMilliseconds + 230_000, 0, 600);
+        balance.Advance(Given.StartMilliseconds + 830_000, 0, 0);
+        Assert.Equal(4_010.9585, balance.Lowest, 1e-3);
+        Assert.True(balance.Left > 15_000);
+    }
+
     [Fact]
     public void WhatComesLaterChangesNothing()
     {

@@ -4,6 +4,7 @@ using LoadWatch.Service.Commands;
 using LoadWatch.Service.Explain;
 using LoadWatch.Service.Tests.Pipeline;
 using LoadWatch.Storage;
+using LoadWatch.Storage.Archives;
 using NodaTime;
 
 namespace LoadWatch.Service.Tests.Commands;
@@ -105,13 +106,13 @@ public sealed class ExplainSessionTests : IDisposable
         folder.Sweep();
         var id = folder.Read((_, session) => session.Activities.OfPerson("bo")[0].Key);
 
-        var byId = Explained((workplace, session) => SessionExplanation.Of(workplace.Configuration, session, id));
+        var byId = Explained((workplace, session) => SessionExplanation.Of(workplace.Configuration, new Archive(workplace.Folder), session, id));
 
         Assert.Equal(byId, AtNoon("bo"));
         Assert.Equal(byId, At("bo", new LocalTime(12, 1)));
         Assert.Null(At("bo", new LocalTime(11, 59)));
         Assert.Null(At("bo", new LocalTime(12, 3)));
-        Assert.Null(Explained((workplace, session) => SessionExplanation.Of(workplace.Configuration, session, id + "9")));
+        Assert.Null(Explained((workplace, session) => SessionExplanation.Of(workplace.Configuration, new Archive(workplace.Folder), session, id + "9")));
         Assert.Contains($"    id {id}", Explained((workplace, session) => DayExplanation.Of(workplace.Configuration, session, "bo", Some.Yesterday)), StringComparison.Ordinal);
     }
 
@@ -203,7 +204,7 @@ public sealed class ExplainSessionTests : IDisposable
 
     private string AtNoon(string person) => At(person, Noon)!;
 
-    private string? At(string person, LocalTime time) => Explained((workplace, session) => SessionExplanation.Of(workplace.Configuration, session, person, Some.Yesterday, time));
+    private string? At(string person, LocalTime time) => Explained((workplace, session) => SessionExplanation.Of(workplace.Configuration, new Archive(workplace.Folder), session, person, Some.Yesterday, time));
 
     private string? Explained(Func<Workplace, StoreSession, string?> explain) => folder.Read(explain);
 

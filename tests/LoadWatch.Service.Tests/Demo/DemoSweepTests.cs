@@ -7,6 +7,7 @@ using LoadWatch.Service.Commands;
 using LoadWatch.Service.Demo;
 using LoadWatch.Service.Explain;
 using LoadWatch.Service.Pipeline;
+using LoadWatch.Storage.Archives;
 using LoadWatch.Storage.Decisions;
 using LoadWatch.Tests;
 using NodaTime;
@@ -117,10 +118,11 @@ public sealed class DemoSweepTests : IDisposable
     /// <summary>I-13: of everybody the last day, every rule, every alert with its history and the last sessions.</summary>
     private static void AssertExplained(Workplace workplace)
     {
+        var archive = new Archive(workplace.Folder);
         var told = workplace.Store.Read(session => Cast.SelectMany(part => new[] { DayExplanation.Of(workplace.Configuration, session, part.Id, date: null) }
             .Concat(RuleBook.All.Select(rule => FindingExplanation.Of(workplace.Configuration, session, part.Id, rule.Name, date: null)))
             .Concat(session.Alerts.All(part.Id).Select(alert => AlertExplanation.Of(session, alert.Id)))
-            .Concat(session.Activities.OfPerson(part.Id).TakeLast(3).Select(activity => SessionExplanation.Of(workplace.Configuration, session, activity.Key)))
+            .Concat(session.Activities.OfPerson(part.Id).TakeLast(3).Select(activity => SessionExplanation.Of(workplace.Configuration, archive, session, activity.Key)))
             .OfType<string>()).ToList());
 
         Assert.True(told.Count > 10 * Cast.Length);
