@@ -170,8 +170,7 @@ internal static class BriefRows
             yield break;
         }
 
-        if (BriefBuilder.Active(subject).All(news => news.Alert.Key.Rule != "silence")
-            && subject.Days.LastOrDefault(day => PlannedPresence.IsNotInYet(day, upTo, subject.Group.Limits.Silence)) is { } waited)
+        if (subject.Days.LastOrDefault(day => PlannedPresence.IsNotInYet(subject, day, upTo)) is { } waited)
         {
             yield return $"recording of {BriefNumbers.Day(waited.Date)} not in yet";
         }

@@ -1,5 +1,4 @@
 using LoadWatch.Days;
-using LoadWatch.Findings;
 using NodaTime;
 
 namespace LoadWatch.Notices;
@@ -17,7 +16,7 @@ internal sealed record PlannedPresence(LocalDate Date, int Expected, int In, int
     public static PlannedPresence? Of(IReadOnlyList<BriefSubject> shown, LocalDate upTo)
     {
         var expected = shown
-            .SelectMany(subject => subject.Days.TakeLast(DaysBack).Select(day => (subject.Group.Limits, Day: day)))
+            .SelectMany(subject => subject.Days.TakeLast(DaysBack).Select(day => (Subject: subject, Day: day)))
             .Where(one => one.Day.Plan.Expected > 0 && one.Day.Date > upTo.PlusDays(-DaysBack) && one.Day.Date <= upTo)
             .ToLookup(one => one.Day.Date);
         if (expected.Count == 0)
@@ -26,10 +25,15 @@ internal sealed record PlannedPresence(LocalDate Date, int Expected, int In, int
         }
 
         var last = expected.MaxBy(days => days.Key)!;
-        return new PlannedPresence(last.Key, last.Count(), last.Count(one => one.Day.State == DayState.Recorded), last.Count(one => IsNotInYet(one.Day, upTo, one.Limits.Silence)));
+        return new PlannedPresence(last.Key, last.Count(), last.Count(one => one.Day.State == DayState.Recorded), last.Count(one => IsNotInYet(one.Subject, one.Day, upTo)));
     }
 
-    /// <summary>Whether a recording that the plan expects is not there, and the days that files are given to come in are not over: no reason to ask anybody yet.</summary>
-    public static bool IsNotInYet(Day day, LocalDate upTo, SilenceLimits limits) =>
-        day is { State: DayState.Unknown, Plan: { Expected: > 0, Absence: null } } && day.Date.PlusDays(limits.PlannedWaitDays) > upTo;
+    /// <summary>
+    /// Whether a recording that the plan expects is not there, and the days that files are given to come in are not over: no reason to ask anybody yet. Of whom silence is told
+    /// already, nothing is waited for.
+    /// </summary>
+    public static bool IsNotInYet(BriefSubject subject, Day day, LocalDate upTo) =>
+        day is { State: DayState.Unknown, Plan: { Expected: > 0, Absence: null } }
+        && day.Date.PlusDays(subject.Group.Limits.Silence.PlannedWaitDays) > upTo
+        && BriefBuilder.Active(subject).All(news => news.Alert.Key.Rule != "silence");
 }
