@@ -107,7 +107,7 @@ internal sealed class SampleReading
     /// <summary>Null where reading can go on, else why the file cannot be used.</summary>
     private Problem? Take(CsvRows rows)
     {
-        if (HoldsNothing(rows))
+        if ((openRows >= RowsHeld || recordings > Most) && HoldsNothing(rows))
         {
             return null;
         }
@@ -122,7 +122,7 @@ internal sealed class SampleReading
             return TooManyRecordings();
         }
 
-        return ReadRow(rows) is { } problem ? PutAside(rows, problem) : null;
+        return ReadRow(rows) is { } problem && !HoldsNothing(rows) ? PutAside(rows, problem) : null;
     }
 
     /// <summary>
@@ -209,9 +209,13 @@ internal sealed class SampleReading
             return shape;
         }
 
-        if (subjects.Of(rows, out var problem) is not { } subject
-            || clock.Read(rows, subject.Clock, out problem) is not { } time
-            || (problem = readings.Take(rows) ?? TooLate(rows, subject, time.ToUnixTimeMilliseconds())) is not null)
+        if (subjects.Of(rows, out var problem) is not { } subject || clock.Read(rows, subject.Clock, out problem) is not { } time)
+        {
+            return problem;
+        }
+
+        var milliseconds = time.ToUnixTimeMilliseconds();
+        if ((problem = readings.Take(rows) ?? TooLate(rows, subject, milliseconds)) is not null)
         {
             return problem;
         }
@@ -225,7 +229,7 @@ internal sealed class SampleReading
         goodRows++;
         changes += before == subject ? 0 : 1;
         before = subject;
-        Add(subject, time.ToUnixTimeMilliseconds());
+        Add(subject, milliseconds);
         return null;
     }
 

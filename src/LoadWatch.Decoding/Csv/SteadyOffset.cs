@@ -10,12 +10,19 @@ namespace LoadWatch.Decoding.Csv;
 internal sealed class SteadyOffset(DateTimeZone zone)
 {
     private ZoneInterval? steady;
+    private (LocalDateTime Local, Instant Instant)? placed;
     private LocalDateTime from;
     private LocalDateTime to;
 
     /// <summary>The moment of a local time, or null where only the zone itself can tell.</summary>
     public Instant? Place(LocalDateTime local)
     {
+        // Rows of many people stand moment by moment.
+        if (placed is { } same && same.Local == local)
+        {
+            return same.Instant;
+        }
+
         if (local.Calendar != CalendarSystem.Iso)
         {
             return null;
@@ -26,7 +33,14 @@ internal sealed class SteadyOffset(DateTimeZone zone)
             Remember(zone.MapLocal(local).EarlyInterval);
         }
 
-        return steady is { } interval && local >= from && local <= to ? local.WithOffset(interval.WallOffset).ToInstant() : null;
+        if (steady is not { } interval || local < from || local > to)
+        {
+            return null;
+        }
+
+        var instant = local.WithOffset(interval.WallOffset).ToInstant();
+        placed = (local, instant);
+        return instant;
     }
 
     private void Remember(ZoneInterval interval)
