@@ -96,7 +96,8 @@ public static class AnchorExplanation
     {
         foreach (var one in observed)
         {
-            text.AppendLine(CultureInfo.InvariantCulture, $"    from own sessions of the 12 months before {Words.Date(one.From)}: {AnchorText.Value(one.Value, one.Kind)} within {AnchorText.Value(one.Error, one.Kind)}, last shown on {Words.Date(one.ShownOn)}: {OneLine.Of(one.Basis)}");
+            var stands = one.From <= on && !observed.Exists(other => other.Of == one.Of && other.From > one.From && other.From <= on);
+            text.AppendLine(CultureInfo.InvariantCulture, $"    from own sessions of the 12 months before {Words.Date(one.From)}: {AnchorText.Value(one.Value, one.Kind)} within {AnchorText.Value(one.Error, one.Kind)}, last shown on {Words.Date(one.ShownOn)}: {OneLine.Of(one.Basis)}{(stands ? AnchorText.Age(one, on) : "")}");
         }
 
         ReferenceExplanation.AppendContradictions(text, on, observed, basis.StatedOf(person));

@@ -1,4 +1,5 @@
 using System.Globalization;
+using LoadWatch.Anchors;
 using LoadWatch.Loads;
 using LoadWatch.People;
 using LoadWatch.Service.Export;
@@ -42,6 +43,11 @@ internal static class AnchorText
         AnchorKind.OneRepetitionMax => $"{Percent(CapacityError.OfOneRepetitionMax(anchor.Source))} (an assumption for {Words.Of(anchor.Source)} values){Borrowed(anchor)}",
         _ => null,
     };
+
+    /// <summary>What is to be known of one that rests on sessions further back than those of a month; empty of others.</summary>
+    public static string Age(ObservedAnchor one, LocalDate on) => one.ShownOn < on.PlusMonths(-ObservedAnchors.Months)
+        ? $"; what showed it is more than {ObservedAnchors.Months} months old: sessions since have shown no value beyond its error, or none at all, and it is read as surely as then"
+        : "";
 
     /// <summary>A measured maximum of no machine is less sure on one.</summary>
     private static string Borrowed(Anchor anchor) => anchor is { Source: AnchorSource.Measured, Machine: null }

@@ -41,7 +41,7 @@ internal static class ReferenceExplanation
             var use = stated.MeasuredOn(date, one.ToAnchor()) is null ? "used" : "not used, one is measured";
             text.AppendLine(
                 CultureInfo.InvariantCulture,
-                $"    from own sessions {AnchorText.Name(one.Kind, one.Sport, one.Exercise, one.Machine)} = {one.Value:0.###} {AnchorKinds.Of(one.Kind).Unit} (within {one.Error:0.###}) from {Words.Date(one.From)} on, {use}: {OneLine.Of(one.Basis)}");
+                $"    from own sessions {AnchorText.Name(one.Kind, one.Sport, one.Exercise, one.Machine)} = {one.Value:0.###} {AnchorKinds.Of(one.Kind).Unit} (within {one.Error:0.###}) from {Words.Date(one.From)} on, {use}: {OneLine.Of(one.Basis)}{AnchorText.Age(one, date)}");
         }
 
         AppendContradictions(text, date, observed, stated);

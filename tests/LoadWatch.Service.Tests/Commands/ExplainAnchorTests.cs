@@ -106,6 +106,9 @@ public sealed class ExplainAnchorTests : IDisposable
         Assert.Contains("    the 12 months before 2026-06-01, cycling: 3 bests", august, StringComparison.Ordinal);
         Assert.Contains("    the 12 months before 2026-08-01, cycling: the same bests", august, StringComparison.Ordinal);
         Assert.Contains("    the 12 months before 2027-08-01, cycling: no session that shows it", later, StringComparison.Ordinal);
+        const string Old = "; what showed it is more than 12 months old: sessions since have shown no value beyond its error, or none at all";
+        Assert.DoesNotContain(Old, august, StringComparison.Ordinal);
+        Assert.Contains(Old, later, StringComparison.Ordinal);
         Assert.Contains("        so the value of 2026-06-01 goes on: another has to lie beyond its error", later, StringComparison.Ordinal);
     }
 
