@@ -27,9 +27,10 @@ internal sealed record FirstLine(IReadOnlyList<BriefSubject> Shown, LocalDate? U
     {
         var sentences = new[]
         {
+            CallsComeFirst ? OfCalls(Calls!) : null,
             Flagged is null ? null : OfFlagged(Flagged),
             Sheets is null ? null : OfSheets(Sheets),
-            Calls is null ? null : OfCalls(Calls),
+            Calls is null || CallsComeFirst ? null : OfCalls(Calls),
             HasWeek && Flagged is null ? $"The week of {People(Shown.Count)}." : null,
             Flagged is null ? null : SeenEarlier(),
             Flagged is null ? null : Planned(),
@@ -58,8 +59,12 @@ internal sealed record FirstLine(IReadOnlyList<BriefSubject> Shown, LocalDate? U
         _ when NothingIsKnown => $"Nothing is known yet: no recording of {People(Shown.Count)} has come in.",
         _ when Silent > 0 => $"Recordings of {Silent} of {Shown.Count} do not come in; nothing else to act on.",
         _ when Self => IsOpen ? $"Nothing to act on{But}." : "All quiet: nothing to act on.",
+        _ when CallsComeFirst => $"Nothing else to act on for {People(Shown.Count)}{But}.",
         _ => IsOpen ? $"Nothing to act on for {People(Shown.Count)}{But}." : $"All quiet: {People(Shown.Count)}, nothing to act on.",
     };
+
+    /// <summary>Somebody to call is something to act on: where it is all there is, it stands large.</summary>
+    private bool CallsComeFirst => Calls?.Calls.Count > 0 && Flagged is { Count: 0 } && Shown.Count > 0 && !NothingIsKnown && Silent == 0;
 
     /// <summary>The questions belong to the sentence that stands large where it has nothing else to say.</summary>
     private string But => Asked == 0 ? "" : $", but {InWords(Asked)}";

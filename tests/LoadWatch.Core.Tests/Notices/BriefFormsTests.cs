@@ -107,6 +107,13 @@ public sealed class BriefFormsTests
         Assert.Equal([new BriefLine("Ann", "Heavy or fast leg work on 1 of the last 28 days, on 7 of the 28 before.")], Build(Everything(), less, unseen, never).Week!.Lost);
     }
 
+    /// <summary>It is the sentence that stands large: "nothing to act on" would hide the list below it.</summary>
+    [Fact]
+    public void SomebodyToCallIsToldFirstWhereThereIsNothingElse() => Assert.StartsWith(
+        "1 person to call. Nothing else to act on for 2 people.",
+        Build(Everything() with { Forms = [BriefForm.Daily, BriefForm.CallList] }, Subject("a", "Ann", Silence("a")), Subject("b", "Ben")).FirstLine,
+        StringComparison.Ordinal);
+
     [Fact]
     public void TheCallListSaysSinceWhenAndWhy()
     {
