@@ -74,25 +74,40 @@ public sealed class Report(IReadOnlyList<int> seeds, int people, int days, bool 
 
     public void Disturbances()
     {
-        var habits = Habits.Squad;
-        Row("squad", "limits", "false alerts a person and 100 days", "of them", "chatter");
-        Row("---", "---", "---", "---", "---");
+        Row("people", "what disturbs", "limits", "false alerts a person and 100 days", "of them", "chatter");
+        Row("---", "---", "---", "---", "---", "---");
+
+        // Nights enough to know how late files usually come.
+        var settled = new Course { NightsBefore = 42 };
+        foreach (var habits in Groups)
+        {
+            foreach (var (name, noise) in new (string, Noise)[]
+            {
+                ("as above", new Noise()),
+                ("every recording on its day", new Noise { Late = 0 }),
+                ("half of the recordings up to 6 days late", new Noise { Late = 0.5, LateDays = 6 }),
+                ("devices read out every 4 days", new Noise { Late = 0, SyncDays = 4 }),
+            })
+            {
+                Disturbed(habits, name, "built in, without waiting for late files", Limits.BuiltIn(habits), noise, settled with { WaitsForLateFiles = false });
+                Disturbed(habits, name, "built in", Limits.BuiltIn(habits), noise, settled);
+            }
+        }
+
+        var squad = Habits.Squad;
         foreach (var (name, noise) in new (string, Noise)[]
         {
-            ("as above", new Noise()),
-            ("every recording on its day", new Noise { Late = 0 }),
-            ("half of the recordings up to 6 days late", new Noise { Late = 0.5, LateDays = 6 }),
             ("nothing missing", new Noise { Missing = 0 }),
             ("30 % of the days missing", new Noise { Missing = 0.3 }),
             ("no sensor fails", new Noise { Faults = 0 }),
         })
         {
-            Disturbed(name, "built in", Limits.BuiltIn(habits), noise);
+            Disturbed(squad, name, "built in", Limits.BuiltIn(squad), noise);
         }
 
-        Disturbed("as above", "built in, without deadband and delays", Limits.WithoutDeadband(Limits.BuiltIn(habits)), new Noise());
-        Disturbed("as above", "before", Limits.Before(habits), new Noise());
-        Disturbed("as above", "before, without deadband and delays", Limits.WithoutDeadband(Limits.Before(habits)), new Noise());
+        Disturbed(squad, "as above", "built in, without deadband and delays", Limits.WithoutDeadband(Limits.BuiltIn(squad)), new Noise());
+        Disturbed(squad, "as above", "before", Limits.Before(squad), new Noise());
+        Disturbed(squad, "as above", "before, without deadband and delays", Limits.WithoutDeadband(Limits.Before(squad)), new Noise());
     }
 
     public void Clinic(int members)
@@ -110,10 +125,10 @@ public sealed class Report(IReadOnlyList<int> seeds, int people, int days, bool 
             Count(seasons.SelectMany(Score.Rows).Max()));
     }
 
-    private void Disturbed(string name, string set, RuleLimits limits, Noise noise)
+    private void Disturbed(Habits habits, string name, string set, RuleLimits limits, Noise noise, Course? course = null)
     {
-        var seasons = Seasons(seed => new WorldMaker(seed, Habits.Squad, noise, limits).Healthy(people, days), Habits.Squad);
-        Row(name, set, Number(seasons.Average(Score.FalsePerPersonAnd100Days)), OfThem(seasons), Count(seasons.Sum(Score.Wavering)));
+        var seasons = Seasons(seed => new WorldMaker(seed, habits, noise, limits).Healthy(people, days), habits, course);
+        Row(habits.Name, name, set, Number(seasons.Average(Score.FalsePerPersonAnd100Days)), OfThem(seasons), Count(seasons.Sum(Score.Wavering)));
     }
 
     private string OfThem(List<SeasonResult> seasons) => string.Join(", ", seasons.SelectMany(Score.FalseAlerts)
@@ -122,7 +137,7 @@ public sealed class Report(IReadOnlyList<int> seeds, int people, int days, bool 
         .ThenBy(rule => rule.Key, StringComparer.Ordinal)
         .Select(rule => $"{rule.Key} {Number(100.0 * rule.Count() / people / days / seeds.Count)}"));
 
-    private List<SeasonResult> Seasons(Func<int, World> world, Habits habits) => [.. seeds.Select(seed => Season.Of(world(seed), habits.Sport))];
+    private List<SeasonResult> Seasons(Func<int, World> world, Habits habits, Course? course = null) => [.. seeds.Select(seed => Season.Of(world(seed), habits.Sport, course))];
 
     private IEnumerable<(Habits Habits, string Set, RuleLimits Limits)> Combinations() =>
         Groups.SelectMany(habits => Sets.Skip(quick ? 1 : 0).Select(set => (habits, set.Name, set.Of(habits))));

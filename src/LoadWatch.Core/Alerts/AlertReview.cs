@@ -12,7 +12,8 @@ public static class AlertReview
     public const int LongestShelvingDays = 60;
 
     /// <summary>
-    /// A finding without an alert raises one; an active alert without its finding returns. An alert that was judged on a later date is left alone. Shelving
+    /// A finding without an alert raises one, where it rests on recordings that are missing once they had their usual time (<see cref="Watching.Told"/>); an active
+    /// alert without its finding returns. An alert that was judged on a later date is left alone. Shelving
     /// ends with the first evaluation on a day after its date, at once where severity rises (less was known when it was shelved), and with the alert. A choice.
     /// </summary>
     /// <param name="current">The person's alerts that are not normal, one for each key; normal ones are passed over.</param>
@@ -31,15 +32,15 @@ public static class AlertReview
     {
         var watch = watching ?? Watching.Everything;
         var ofDate = findings.Where(finding => finding.Person == person && finding.Date == evaluationDate).ToList();
-        var held = ofDate.Where(finding => finding.Severity > Severity.Note).ToDictionary(finding => finding.Key);
+        var held = ofDate.Where(finding => finding.Severity > Severity.Note).Select(watch.Told).ToDictionary(told => told.Finding.Key);
         var suppressed = ofDate.Where(finding => finding.Severity == Severity.Suppressed).Select(finding => finding.Key).ToHashSet();
         var standing = current.Where(alert => alert.Key.Person == person && alert.State != AlertState.Normal).ToList();
         var known = standing.Select(alert => alert.Key).ToHashSet();
         return Gather([
             .. standing.Select(alert => alert.Judged > evaluationDate ? new Reviewed(alert)
-                : held.TryGetValue(alert.Key, out var finding) ? Held(alert, finding, watch, lastSequence)
+                : held.TryGetValue(alert.Key, out var told) ? Held(alert, told, watch, lastSequence)
                 : NotHeld(alert, evaluationDate, Why(alert, evaluationDate, suppressed, heldOn, watch), lastSequence)),
-            .. held.Values.Where(finding => !known.Contains(finding.Key)).Select(finding => RaiseNew(finding, watch, lastSequence)),
+            .. held.Values.Where(told => !known.Contains(told.Finding.Key) && told.From <= evaluationDate).Select(told => RaiseNew(told.Finding, watch, lastSequence)),
         ]);
     }
 
@@ -59,8 +60,15 @@ public static class AlertReview
     public static AlertReviewResult Unshelve(Alert alert, LocalDate date, Func<string, int> lastSequence) =>
         Gather([Shelving(new Reviewed(alert), null, AlertChangeReason.Unshelved, date, lastSequence)]);
 
-    private static Reviewed Held(Alert alert, Finding finding, Watching watching, Func<string, int> lastSequence)
+    /// <summary>What stands goes on; what has returned is raised again, but for what is to wait for recordings that may be late.</summary>
+    private static Reviewed Held(Alert alert, (Finding Finding, LocalDate From) told, Watching watching, Func<string, int> lastSequence)
     {
+        var finding = told.Finding;
+        if (!AlertLife.IsActive(alert.State) && told.From > finding.Date)
+        {
+            return new Reviewed(alert);
+        }
+
         var judged = alert with { Judged = finding.Date, Severity = finding.Severity, Text = finding.Text, LimitsHash = watching.HashOf(finding.Rule) };
         var resumed = Step(new Reviewed(judged), AlertSignal.Resume, finding.Date, evidence: null, lastSequence);
         var stepped = Step(resumed, Signal(alert, finding), finding.Date, finding.Evidence, lastSequence);

@@ -58,6 +58,9 @@ public abstract class RuleRecord
     /// <summary>How an alert ended by itself.</summary>
     public abstract string Returned(FindingKey key, RuleLimits limits, bool self);
 
+    /// <summary>Days that the rule has given recordings that are missing for a finding; null: it rests on none that are missing.</summary>
+    public virtual int? WaitedDays(Finding finding, RuleLimits limits) => null;
+
     /// <summary>Every part of the record that is about no single finding, by what it is called.</summary>
     public IReadOnlyList<(string Name, string Text)> Fields(string rule) =>
     [

@@ -15,7 +15,7 @@ internal sealed class SilenceRecord : RuleRecord
 
     public override string Ends => "The next recording.";
 
-    public override string DataNeeded => "The person's own rhythm of 6 gaps or more, or a plan that says which sessions bring a recording.";
+    public override string DataNeeded => "The person's own rhythm of 6 gaps or more, or a plan that says which sessions bring a recording. Whose files usually come late is given that time.";
 
     public override string Basis =>
         "A choice; missed sessions and extra days were fitted by simulation.";
@@ -34,6 +34,9 @@ internal sealed class SilenceRecord : RuleRecord
     public override string Response(FindingKey key, bool self) => self
         ? "a look at strap, watch and upload if you did train: one of them may have failed."
         : "asking whether training went on; a strap, watch or upload may have failed.";
+
+    /// <summary>A planned session was given some days already, the rhythm gives none.</summary>
+    public override int? WaitedDays(Finding finding, RuleLimits limits) => finding.Unit == SilenceRule.OfPlan ? limits.Silence.PlannedWaitDays : 0;
 
     public override string Returned(FindingKey key, RuleLimits limits, bool self) =>
         "recordings are coming in again";

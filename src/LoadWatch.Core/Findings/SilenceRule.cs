@@ -11,6 +11,9 @@ namespace LoadWatch.Findings;
 /// </summary>
 public sealed class SilenceRule : IRule
 {
+    /// <summary>The unit of what rests on planned sessions.</summary>
+    internal const string OfPlan = "sessions";
+
     public string Name => "silence";
 
     public RuleRecord Record { get; } = new SilenceRecord();
@@ -83,7 +86,7 @@ public sealed class SilenceRule : IRule
         planned.First[limits.PlannedMissed - 1].PlusDays(limits.PlannedWaitDays),
         planned.Missed,
         limits.PlannedMissed,
-        "sessions",
+        OfPlan,
         $"No recording of the last {planned.Missed} planned sessions, the first on {Wording.Date(planned.First[0], day.Date)}.{attended}",
         new Evidence(
             "planned sessions in a row for which a recording was expected and none came, each given some days to come in",

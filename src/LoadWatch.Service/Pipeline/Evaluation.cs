@@ -32,7 +32,10 @@ public sealed class Evaluation(WorkingConfiguration configuration, Answers answe
             id => session.Alerts.Changes.NextSequence(id) - 1,
             session.Findings.OfPerson(person.Id, date, date),
             session.Findings.Held,
-            new Watching(configuration.GroupOf(person).Limits, session.Days.OfPerson(person.Id, date, date).Select(day => day.Plan).FirstOrDefault(DayPlan.None)));
+            new Watching(configuration.GroupOf(person).Limits, session.Days.OfPerson(person.Id, date, date).Select(day => day.Plan).FirstOrDefault(DayPlan.None))
+            {
+                Lateness = () => LatenessOf(session, person, date),
+            });
         foreach (var alert in review.Alerts)
         {
             session.Alerts.Put(alert);
@@ -46,4 +49,7 @@ public sealed class Evaluation(WorkingConfiguration configuration, Answers answe
         report.AlertChanges += review.Changes.Count;
         session.Evaluations.Add(person.Group, date, configuration.Hash);
     }
+
+    private static Lateness LatenessOf(StoreSession session, Person person, LocalDate date) => Lateness.Of(
+        [.. session.Sightings.FirstOfDates(person.Id, date.PlusDays(-Lateness.LookBackDays)).Select(one => (one.Recorded(person), PersonDay.LastOver(one.Seen, person)))], date);
 }

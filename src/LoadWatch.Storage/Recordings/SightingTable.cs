@@ -48,6 +48,18 @@ public sealed class SightingTable
         ORDER BY s.inbox
         """;
 
+    // Files by their contents, an archive's members by the archive in which they came first; not what has followed another content under its name, which has brought
+    // some of it before. Of rows of a table it is known of each when it came.
+    private const string SelectFirstOfDates = """
+        SELECT r.start, r.local_offset_seconds, NULL AS date, MIN(s.first_seen) AS first_seen
+        FROM recording r JOIN arrival a ON a.sha = r.sha JOIN sighting s ON s.sha = a.object_sha
+        WHERE r.person = @person AND r.start >= @start AND (a.object_sha <> a.sha OR NOT EXISTS (
+            SELECT 1 FROM sighting other WHERE other.inbox = s.inbox AND other.path = s.path AND other.sha <> s.sha))
+        GROUP BY r.sha, r.part, r.start, r.local_offset_seconds
+        UNION ALL
+        SELECT NULL, 0, date, MIN(since) FROM table_row WHERE person = @person AND kind IN ('sessions', 'sets') AND date >= @from GROUP BY date
+        """;
+
     private const string SelectNewest = "SELECT first_seen FROM sighting ORDER BY first_seen DESC LIMIT 1";
 
     private const string SelectOldestWaiting = """
@@ -122,11 +134,28 @@ public sealed class SightingTable
     /// <summary>The inboxes in which a person's latest recording was seen, sorted; empty without one.</summary>
     public IReadOnlyList<string> InboxesOfLatest(string person) => session.Rows<string>(SelectInboxesOfLatest, new { person });
 
+    /// <summary>When each recording, and each date of a table's sessions and sets, of a person was seen first; in no order.</summary>
+    /// <param name="from">First date, or the one before it.</param>
+    public IReadOnlyList<FirstSight> FirstOfDates(string person, LocalDate from) => session
+        .Rows<FirstRow>(SelectFirstOfDates, new { person, from, start = from.AtMidnight().InUtc().ToInstant() })
+        .ConvertAll(row => new FirstSight(row.Date, row.Start, Offset.FromSeconds(row.LocalOffsetSeconds), row.FirstSeen));
+
     /// <summary>When a name was last seen with a content that was new there; null where nothing ever came.</summary>
     public Instant? Newest() => session.Row<MomentRow>(SelectNewest)?.FirstSeen;
 
     /// <summary>When the arrival came that has been waiting longest; null where none waits.</summary>
     public Instant? OldestWaiting() => session.Row<MomentRow>(SelectOldestWaiting)?.FirstSeen;
+
+    private sealed class FirstRow
+    {
+        public Instant? Start { get; init; }
+
+        public int LocalOffsetSeconds { get; init; }
+
+        public LocalDate? Date { get; init; }
+
+        public Instant FirstSeen { get; init; }
+    }
 
     private sealed class MomentRow
     {

@@ -26,6 +26,7 @@ public sealed class PersonNights(TruePerson truth, Group group, Sport sport, Cou
     private readonly Dictionary<string, int> sequences = new(StringComparer.Ordinal);
     private readonly List<AlertChange> changes = [];
     private PersonPlan plan = PersonPlan.None;
+    private LocalDate? firstNight;
     private LocalDate? lastNight;
 
     public TruePerson Truth => truth;
@@ -55,6 +56,7 @@ public sealed class PersonNights(TruePerson truth, Group group, Sport sport, Cou
 
         Compute(course.FromNothing ? LocalDate.MinIsoValue : dirty.PlusDays(-LoadCalendar.SettledDaysBack), date);
         lastNight = date;
+        firstNight ??= date;
         Take(AlertReview.Review(
             truth.Person.Id,
             date,
@@ -62,11 +64,14 @@ public sealed class PersonNights(TruePerson truth, Group group, Sport sport, Cou
             id => sequences.GetValueOrDefault(id),
             findings.GetValueOrDefault(date, []),
             (key, on) => findings.GetValueOrDefault(on, []).Exists(finding => finding.Key == key && finding.Severity > Severity.Note),
-            new Watching(group.Limits, days.Count == 0 ? DayPlan.None : days[^1].Plan)));
+            new Watching(group.Limits, days.Count == 0 ? DayPlan.None : days[^1].Plan) { Lateness = () => LatenessOn(date) }));
     }
 
     /// <summary>Staff say that they have seen an alert.</summary>
     public void Acknowledge(string id, LocalDate date) => Take(AlertReview.Acknowledge(alerts[id], date, known => sequences.GetValueOrDefault(known)));
+
+    private Lateness LatenessOn(LocalDate date) => !course.WaitsForLateFiles ? Lateness.Unknown : Lateness.Of(
+        [.. recordings.Where(one => one.ArrivesOn <= date).Select(one => (one.Activity.Date, LocalDate.Max(one.ArrivesOn, firstNight!.Value)))], date);
 
     private void Compute(LocalDate from, LocalDate to)
     {

@@ -93,6 +93,9 @@ public sealed record Course
     /// <summary>Nights before the counted ones; all that came before comes in the first of them.</summary>
     public int NightsBefore { get; init; } = 14;
 
+    /// <summary>Whether silence is given the time within which the person's files usually come.</summary>
+    public bool WaitsForLateFiles { get; init; } = true;
+
     /// <summary>Whether anybody says that they have seen anything.</summary>
     public bool StaffAnswer { get; init; } = true;
 }

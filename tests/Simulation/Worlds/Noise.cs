@@ -19,4 +19,7 @@ public sealed record Noise
     public double Late { get; init; } = 0.1;
 
     public int LateDays { get; init; } = 3;
+
+    /// <summary>A device is read out once in so many days, each person's on days of their own; 1: every day.</summary>
+    public int SyncDays { get; init; } = 1;
 }

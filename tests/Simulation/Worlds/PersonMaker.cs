@@ -146,7 +146,14 @@ internal sealed class PersonMaker(Person person, Habits habits, Noise noise, Gro
             (false, true, false) => 1.3 * session.Load,
             _ => session.Load,
         };
-        return missing && !sure ? null : new Record(load, late ? session.Date.PlusDays(days) : session.Date, session.Date < swap ? "device 1" : "device 2");
+        return missing && !sure ? null : new Record(load, ReadOut(late ? session.Date.PlusDays(days) : session.Date), session.Date < swap ? "device 1" : "device 2");
+    }
+
+    /// <summary>The next date on which the device is read out.</summary>
+    private LocalDate ReadOut(LocalDate date)
+    {
+        var days = Period.DaysBetween(calendar.First, date) + chance.Stream("read out").Below(noise.SyncDays);
+        return date.PlusDays((noise.SyncDays - (days % noise.SyncDays)) % noise.SyncDays);
     }
 
     private IEnumerable<Told> Told(IReadOnlyList<Slot> week, List<Happening> happenings)
