@@ -85,7 +85,7 @@ internal static class AnchorProposals
         var since = month.PlusMonths(-PowerMaxMonths);
         var best = sessions
             .Where(session => session.Date >= since && IsSprint(session))
-            .Select(session => (session.Date, Watts: session.Best(Channel.Power, 1) ?? 0))
+            .Select(session => (session.Date, Watts: session.Best(Channel.Power, 1)!.Value))
             .OrderByDescending(one => one.Watts).ThenByDescending(one => one.Date)
             .ToList();
         return best.Count == 0

@@ -53,7 +53,7 @@ public sealed record PowerCapacity(Anchor Critical, Anchor? WPrime, Anchor? Maxi
 
         var wPrime = anchors.On(date, person, AnchorKind.WPrime, sport) is { Value: > 0 } stated ? stated : null;
         var recent = anchors.Since(date.PlusDays(-RecentDays), date, person, AnchorKind.PowerMax, sport);
-        var maximum = recent is not null && recent.Value >= LeastRatio * critical.Value ? recent : null;
+        var maximum = recent is not null && Significant.Round(recent.Value) >= Significant.Round(LeastRatio * critical.Value) ? recent : null;
         return new PowerCapacity(critical, wPrime, maximum, [.. Missing(recent, maximum, wPrime)]);
     }
 

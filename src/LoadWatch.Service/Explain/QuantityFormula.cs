@@ -11,11 +11,11 @@ public sealed record QuantityFormula(string Formula, string Source)
 {
     private const string NoSource = "a plain total, no source needed";
     private const string Practice = "common practice, no published source";
-    private const string Effort = "steps a minute, else by speed and climb, or by power and body mass";
     private const string EffortSource = "Tudor-Locke et al. 2019, 2020, 2021, Int J Behav Nutr Phys Act; Bushman 2020, ACSM's Health Fit J 24(4)";
 
     /// <summary>Null for a quantity that a table states: it is taken as it stands.</summary>
-    public static QuantityFormula? Of(string quantity, EquationChoices equations) => quantity switch
+    /// <param name="ageYears">Of the person on the date of the session; null where not known.</param>
+    public static QuantityFormula? Of(string quantity, EquationChoices equations, int? ageYears) => quantity switch
     {
         QuantityNames.BanisterTrimp => new(
             "sum over the readings of minutes x a exp(b x), x = (heart rate - resting) / (maximal - resting), held within 0 and 1",
@@ -40,16 +40,21 @@ public sealed record QuantityFormula(string Formula, string Source)
         QuantityNames.SpeedTop or QuantityNames.PowerTop => new("highest value held for 1 s", Practice),
         QuantityNames.SpeedTopShare => new("top speed / the person's best speed", Practice),
         QuantityNames.Accelerations or QuantityNames.Decelerations => new(
-            "efforts of 2.5 m/s2 or more, by the slope of speed over half a second",
-            "bound and sampling: Harper, Carling and Kiely 2019, Sports Med 49:1923; how long an effort lasts is a choice"),
-        QuantityNames.MinutesModerate => new("minutes of 3 METs and more by " + Effort, EffortSource),
-        QuantityNames.MinutesVigorous => new("minutes of 6 METs and more by " + Effort, EffortSource),
+            "efforts of 2.5 m/s2 or more, by the slope of speed over half a second, held for 0.5 s at ten readings a second or more, for 1 s at fewer",
+            "bound and sampling: Harper, Carling and Kiely 2019, Sports Med 49:1923 (above 2.5 m/s2; 2.5 itself counts here); how long an effort lasts is a choice"),
+        QuantityNames.MinutesModerate => OfEffort("3", StepCadence.Lines(equations.StepCadence, ageYears).Moderate),
+        QuantityNames.MinutesVigorous => OfEffort("6", StepCadence.Lines(equations.StepCadence, ageYears).Vigorous),
         QuantityNames.Sets or QuantityNames.Repetitions => new("counted over the working sets", NoSource),
         QuantityNames.Kilograms => new("sum of kilograms x repetitions over the working sets", NoSource),
         _ when quantity.StartsWith(QuantityNames.OneRepetitionMaxOf, StringComparison.Ordinal) => OfMaximum(equations.OneRepetitionMaxByRepetitions),
-        _ when quantity.StartsWith(DistanceAbove.Prefix, StringComparison.Ordinal) => new("sum of speed x time at the bound and faster", "common practice; no consensus on bounds (Gualtieri et al. 2023, Front Sports Act Living 5:1116293)"),
+        _ when quantity.StartsWith(DistanceAbove.Prefix, StringComparison.Ordinal) => new("sum of speed x time at the bound and faster, a reading taken as the middle of its tenth of a metre per second (up to 0.05 m/s off)", "common practice; no consensus on bounds (Gualtieri et al. 2023, Front Sports Act Living 5:1116293)"),
         _ => null,
     };
+
+    private static QuantityFormula OfEffort(string mets, double stepsPerMinute) => new(
+        FormattableString.Invariant(
+            $"minutes of {mets} METs and more: on foot from {stepsPerMinute} steps a minute on where cadence is usable, else by the oxygen cost of speed and climb; on a bicycle by that of power and body mass"),
+        EffortSource);
 
     private static QuantityFormula OfMaximum(OneRepetitionMaxEquation equation) =>
         new("kilograms / the share of the maximum that repetitions done and in reserve let expect, the highest of the sets", SourceOf(equation));

@@ -205,7 +205,7 @@ public sealed class SessionExplanation
         {
             Line(QuantityText.Of(quantity));
             var giver = activity.StatedBy.GetValueOrDefault(quantity.Name);
-            var formula = giver is null ? QuantityFormula.Of(quantity.Name, equations) : null;
+            var formula = giver is null ? QuantityFormula.Of(quantity.Name, equations, person.AgeOn(activity.Date)) : null;
             Below(giver is not null ? $"as the table {OneLine.Of(giver)} states it" : formula is null ? "as a table states it" : $"formula  {formula.Formula}");
             if (formula is not null)
             {

@@ -39,6 +39,16 @@ public class PowerCapacityTests
         Assert.Equal(counts, capacity.NotSeen.Count == 0);
     }
 
+    /// <summary>2.5 x 100.04 is a little more than 250.1 in binary numbers.</summary>
+    [Fact]
+    public void TheRatioIsComparedInRoundedNumbers()
+    {
+        Anchor[] anchors = [.. With(AnchorKind.CriticalPower, one => one with { Value = 100.04 }).Select(one => one.Kind == AnchorKind.PowerMax ? one with { Value = 250.1 } : one)];
+
+        Assert.True(250.1 < 2.5 * 100.04);
+        Assert.NotNull(On(anchors).Maximum);
+    }
+
     [Fact]
     public void WithoutWPrimeItIsALowerBound() =>
         Assert.Equal(Grade.D, On([.. Given.Cyclist.Where(one => one.Kind != AnchorKind.WPrime)]).Grade);

@@ -141,8 +141,20 @@ public sealed class ExplainSessionTests : IDisposable
         var equations = new LoadWatch.Activities.EquationChoices();
         Assert.All(
             [.. QuantityNames.AllWith([5.5], [0.8]), QuantityNames.SpeedTop, QuantityNames.SpeedTopShare, QuantityNames.PowerTop, QuantityNames.OneRepetitionMaxOf + "squat"],
-            name => Assert.True(QuantityFormula.Of(name, equations) is { Formula.Length: > 10, Source.Length: > 10 }, name));
-        Assert.Null(QuantityFormula.Of("jumps", equations));
+            name => Assert.True(QuantityFormula.Of(name, equations, ageYears: 70) is { Formula.Length: > 10, Source.Length: > 10 }, name));
+        Assert.Null(QuantityFormula.Of("jumps", equations, ageYears: 70));
+    }
+
+    [Theory]
+    [InlineData(LoadWatch.Loads.StepCadenceLine.Rounded, 70, "100", "130")]
+    [InlineData(LoadWatch.Loads.StepCadenceLine.ByAge, 70, "103.1", "142.9")]
+    [InlineData(LoadWatch.Loads.StepCadenceLine.ByAge, null, "100", "130")]
+    public void MinutesOfEffortSayFromHowManyStepsTheyCount(LoadWatch.Loads.StepCadenceLine line, int? ageYears, string moderate, string vigorous)
+    {
+        var equations = new LoadWatch.Activities.EquationChoices { StepCadence = line };
+
+        Assert.Contains($"minutes of 3 METs and more: on foot from {moderate} steps", QuantityFormula.Of(QuantityNames.MinutesModerate, equations, ageYears)!.Formula, StringComparison.Ordinal);
+        Assert.Contains($"minutes of 6 METs and more: on foot from {vigorous} steps", QuantityFormula.Of(QuantityNames.MinutesVigorous, equations, ageYears)!.Formula, StringComparison.Ordinal);
     }
 
     [Fact]
