@@ -6,6 +6,7 @@
 // 5. the line through them must be sure: critical value within 5 %, reserve within 25 %, both above 0; else the longest goes, since long efforts are rarely all out;
 // 6. the mean of the shortest must be above that of the longest by 10 % of power, 5 % of speed: bests so alike at all durations are those of steady work, and tell no curve.
 // Durations of 2 to 15, at most 30 minutes are those for which the line holds (Monod and Scherrer 1965; Moritani et al. 1981). All numbers are choices.
+// Speed is taken as it was recorded, not as that on the level of the same cost: bests downhill raise the line, hilly routes lower it.
 using System.Globalization;
 using LoadWatch.Recordings;
 using LoadWatch.Stimulus;

@@ -10,7 +10,8 @@ namespace LoadWatch.Loads;
 /// </summary>
 public sealed class LoadOrder
 {
-    private const int LastLineMonths = 36;
+    /// <summary>So long a line goes on while heart rate is not valid. A choice.</summary>
+    public const int LastLineMonths = 36;
 
     private readonly string wanted;
     private readonly IReadOnlyList<string> fallbacks;

@@ -33,11 +33,11 @@ internal static class EnduranceChannels
     {
         if (power is not null && usable[Channel.Power] is { } watts)
         {
-            return (PowerStimulus.Of(watts, power, variants), watts);
+            return (PowerStimulus.Of(watts, power, variants).SeenIn(watts.Share), watts);
         }
 
         return speed is not null && usable[Channel.Speed] is { } metresPerSecond
-            ? (SpeedStimulus.Of(metresPerSecond, usable[Channel.Altitude], usable.Recording.Sport, speed, variants), metresPerSecond)
+            ? (SpeedStimulus.Of(metresPerSecond, usable[Channel.Altitude], usable.Recording.Sport, speed, variants).SeenIn(metresPerSecond.Share), metresPerSecond)
             : (null, null);
     }
 

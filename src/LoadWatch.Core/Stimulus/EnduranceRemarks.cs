@@ -42,13 +42,20 @@ internal static class EnduranceRemarks
         }
     }
 
+    /// <summary>Of bouts where a part of the session was not seen.</summary>
+    public static string OfUnseen(string channel, double share, bool isReached)
+    {
+        var unseen = (100 * (1 - share)).ToString("0", CultureInfo.InvariantCulture);
+        return $"{unseen} % of the session without usable {channel}: {(isReached ? "bouts and the largest class are a lower bound" : "bouts and the largest class are unknown, as hard work may lie there")}";
+    }
+
     /// <summary>How far a poorer channel tells what a better one did not; nothing under a minute.</summary>
     public static IEnumerable<string> OfFill(string better, long milliseconds)
     {
         if (milliseconds >= LeastSeconds * 1000)
         {
             var minutes = (milliseconds / 60_000.0).ToString("0", CultureInfo.InvariantCulture);
-            yield return $"{minutes} min without usable {better}: heart rate tells the slow and medium classes there, bouts and the largest class are unknown";
+            yield return $"{minutes} min without usable {better}: heart rate tells the slow and medium classes there";
         }
     }
 

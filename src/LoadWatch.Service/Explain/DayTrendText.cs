@@ -17,7 +17,11 @@ internal static class DayTrendText
             text.AppendLine(CultureInfo.InvariantCulture, $"    load {Number(session.Load)} of the session {session.Key[..Math.Min(12, session.Key.Length)]} from {session.ConvertedFrom} (estimated): {error}");
         }
 
-        Line(text, "standard error of the load: root of the sum of squares of those of its converted sessions", day.LoadError);
+        if (day.LoadError is not null)
+        {
+            Line(text, "standard error of the load: root of the sum of squares of those of its converted sessions", day.LoadError);
+        }
+
         Line(text, "usual week: median of the 8 newest ordinary weeks of the 16 before these 7 days", day.UsualWeek);
         Line(text, "change against the last ordinary week, fraction", day.WeeklyChangeOrdinary);
         Line(text, "largest session of 30 days, by load", day.LargestSession30);

@@ -4,6 +4,7 @@ using LoadWatch.Days;
 using LoadWatch.Findings;
 using LoadWatch.Service.Configuration;
 using LoadWatch.Service.Export;
+using LoadWatch.Service.Pipeline;
 using LoadWatch.Storage;
 using NodaTime;
 
@@ -38,6 +39,11 @@ public static class FindingExplanation
         if (found.Count == 0)
         {
             text.AppendLine(CultureInfo.InvariantCulture, $"    {WhyNone(configuration, session, known, rule, on)}");
+        }
+
+        if (RuleBook.OfLoad.Any(one => one.Name == rule))
+        {
+            ReferenceExplanation.Append(text, known, configuration.GroupOf(known), TableBasis.Of(configuration, session), on);
         }
 
         if (rule == FallingCapacityRule.Word)

@@ -19,9 +19,9 @@ internal static class LoadTrendText
     {
         Line(text, $"load ({group.LoadQuantity})", day.Load);
         AppendLoads(text, day.Date, days.ToDictionary(one => one.Date));
-        Line(text, "acute: A = sum of 7 days, scaled to the covered ones", day.Acute);
-        Line(text, "chronic: mean week of 28 days, (A + W1 + W2 + W3) / 4, scaled to the covered ones", day.Chronic);
-        Line(text, "mean week of days 8 to 28 back, (W1 + W2 + W3) / 3, scaled to the covered ones", day.ChronicBefore);
+        Line(text, "acute = sum of the known loads of 7 days x 7 / known days", day.Acute);
+        Line(text, "chronic = mean week of 28 days: sum of their known loads x 7 / known days", day.Chronic);
+        Line(text, "mean week of days 8 to 28 back: sum of their known loads x 7 / known days", day.ChronicBefore);
         Line(text, "ratio, coupled = acute / chronic (Lolli et al. 2019, Br J Sports Med 53:921-922)", day.RatioCoupled);
         Line(text, "ratio, uncoupled = acute / mean week of days 8 to 28 back (Windt and Gabbett 2018, Br J Sports Med 53:988-990)", day.RatioUncoupled);
         AppendAverages(text, day);

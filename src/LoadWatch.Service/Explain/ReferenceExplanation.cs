@@ -17,12 +17,12 @@ internal static class ReferenceExplanation
     /// <summary>Nothing where the person's loads hang on none.</summary>
     public static void Append(StringBuilder text, Person person, Group group, TableBasis basis, LocalDate date)
     {
-        var periods = ReferencePeriods.Of(person, group, basis.AnchorsOf(person));
+        var anchors = basis.AnchorsOf(person);
+        var periods = ReferencePeriods.Of(person, group, anchors);
         var now = periods.On(date);
         foreach (var value in now.Values)
         {
-            var number = value.Value is { } known ? $"{known.ToString("0.###", CultureInfo.InvariantCulture)} {AnchorKinds.Of(value.Kind).Unit}" : "unknown";
-            text.AppendLine(CultureInfo.InvariantCulture, $"    reference value {AnchorKinds.Of(value.Kind).Name} = {number}, for every session of the windows of this date");
+            text.AppendLine(CultureInfo.InvariantCulture, $"    for every session of the windows of this date: {Stated(value, now, person, anchors)}");
         }
 
         foreach (var (earlier, later) in periods.All.Zip(periods.All.Skip(1)).Where(pair => pair.Second.From <= date && pair.Second.From > date.PlusDays(-LoadCalendar.LookBackDays)))
@@ -30,6 +30,14 @@ internal static class ReferenceExplanation
             var also = later.From > date.PlusDays(-ReferencePeriods.WindowDays) ? "; rules of load are read by the values before it, too" : "";
             text.AppendLine(CultureInfo.InvariantCulture, $"    changed on {Words.Date(later.From)}: {ReferenceWords.Of(later.ChangesSince(earlier))}{also}");
         }
+    }
+
+    private static string Stated(ReferenceValue value, ReferencePeriod period, Person person, AnchorBook anchors)
+    {
+        var on = value.Kind == AnchorKind.SpeedMax ? period.ValuesOn : period.HeartRateOn;
+        return anchors.On(on, person.Id, value.Kind) is { } anchor ? AnchorText.Of(anchor)
+            : value is { Kind: AnchorKind.HeartRateMax, Value: not null } && AnchorText.ByAge(person, on, anchors.HeartRateMaxEquation) is { } byAge ? byAge
+            : $"{AnchorText.Name(value.Kind)} unknown";
     }
 
     /// <summary>What the person's own sessions tell on a date: used where nothing was measured, shown where it contradicts what was.</summary>

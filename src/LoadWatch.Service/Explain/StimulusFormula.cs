@@ -17,8 +17,8 @@ internal sealed record StimulusFormula(string Formula, string Source)
     /// <summary>Null where nothing was read.</summary>
     public static StimulusFormula? Of(string channel) => channel switch
     {
-        StimulusChannels.Power => new("drive 0.65 at critical power, 1 at the maximal power that what is left of W' allows; class seconds = recruited share of the class x time", Pool),
-        StimulusChannels.Speed => new("drive 0.65 at critical speed, 1 at the maximal speed that what is left of D' allows; slopes as the speed on the level of the same cost", $"{Pool}; slopes by Minetti et al. 2002"),
+        StimulusChannels.Power => new("drive 0.65 at critical power, 1 at the maximal power that what is left of W' allows, where there is a true one; class seconds = recruited share of the class x time", Pool),
+        StimulusChannels.Speed => new("drive 0.65 at critical speed, 1 at the maximal speed that what is left of D' allows, where there is a true one; slopes as the speed on the level of the same cost", $"{Pool}; slopes by Minetti et al. 2002"),
         StimulusChannels.HeartRate => new("drive 0.65 at the second threshold (85 % of the reserve where none is anchored), in proportion below", Pool),
         StimulusChannels.Sets => new("drive = load / capacity, which falls evenly from the rested maximum to the load at the repetition that fails", Pool),
         StimulusChannels.Declared => new("taken as staff declared it", "no source: a statement"),
@@ -54,19 +54,19 @@ internal sealed record StimulusFormula(string Formula, string Source)
 
     /// <summary>What no measurement stands behind; nothing where nothing was read.</summary>
     /// <param name="age">Full years on the date, or null where unknown.</param>
-    /// <param name="seesFatigue">Whether what is left above the critical value was reckoned with.</param>
+    /// <param name="steps">Of power or speed; null where they are not known, and nothing is said of what lies above the critical value.</param>
     /// <param name="rules">By which sets were read; empty where that is not known.</param>
-    public static IEnumerable<string> Assumptions(string channel, int? age, bool seesFatigue, IReadOnlyCollection<SetRule> rules) =>
-        channel is StimulusChannels.None or StimulusChannels.Declared ? [] : [.. OfChannel(channel, seesFatigue, rules), .. OfAll(channel, age)];
+    public static IEnumerable<string> Assumptions(string channel, int? age, EnduranceSteps? steps, IReadOnlyCollection<SetRule> rules) =>
+        channel is StimulusChannels.None or StimulusChannels.Declared ? [] : [.. OfChannel(channel, steps, rules), .. OfAll(channel, age)];
 
-    private static IEnumerable<string> OfChannel(string channel, bool seesFatigue, IReadOnlyCollection<SetRule> rules) => channel switch
+    private static IEnumerable<string> OfChannel(string channel, EnduranceSteps? steps, IReadOnlyCollection<SetRule> rules) => channel switch
     {
-        StimulusChannels.Power => [AtCritical("critical power"), .. OfFatigue("critical power", "W'", seesFatigue)],
+        StimulusChannels.Power => [AtCritical("critical power"), .. Above("critical power", "W'", steps)],
         StimulusChannels.Speed =>
         [
             AtCritical("critical speed"),
-            .. OfFatigue("critical speed", "D'", seesFatigue),
-            .. seesFatigue ? [string.Create(CultureInfo.InvariantCulture, $"D' comes back as W' does, critical speed standing for {WPrimeBalance.FittedCriticalWatts:0} W")] : Array.Empty<string>(),
+            .. Above("critical speed", "D'", steps),
+            .. steps is { LowestLeft: not null } ? [string.Create(CultureInfo.InvariantCulture, $"D' comes back as W' does, critical speed standing for {WPrimeBalance.FittedCriticalWatts:0} W")] : Array.Empty<string>(),
         ],
         StimulusChannels.HeartRate => [AtCritical("the second threshold") + ", in proportion below it"],
         _ =>
@@ -80,9 +80,13 @@ internal sealed record StimulusFormula(string Formula, string Source)
 
     private static string AtCritical(string critical) => string.Create(CultureInfo.InvariantCulture, $"the relative drive at {critical} is {Variant.Mid.CriticalDrive:0.00}");
 
-    private static IEnumerable<string> OfFatigue(string critical, string reserve, bool seesFatigue) => seesFatigue
-        ? [$"what can be given above {critical} falls in proportion to what is left of {reserve}"]
-        : [$"every moment above {critical} is read as fresh"];
+    private static IEnumerable<string> Above(string critical, string reserve, EnduranceSteps? steps) => steps switch
+    {
+        null => [],
+        { Limits.Maximum: null } => [$"without a true maximum every moment above {critical} is read as at it, a lower bound"],
+        { LowestLeft: null } => [$"every moment above {critical} is read as fresh"],
+        _ => [$"what can be given above {critical} falls in proportion to what is left of {reserve}"],
+    };
 
     private static IEnumerable<string> OfAll(string channel, int? age)
     {

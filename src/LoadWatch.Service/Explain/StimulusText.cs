@@ -45,7 +45,7 @@ internal sealed class StimulusText(JoinedActivity activity, SessionStimulus? arc
 
     /// <summary>What no measurement stands behind.</summary>
     public IEnumerable<string> Assumptions() =>
-        channels.SelectMany(channel => StimulusFormula.Assumptions(channel, age, seesFatigue: archived?.Endurance is not { LowestLeft: null }, [.. Rules])).Distinct(StringComparer.Ordinal);
+        channels.SelectMany(channel => StimulusFormula.Assumptions(channel, age, archived?.Endurance, [.. Rules])).Distinct(StringComparer.Ordinal);
 
     private IEnumerable<string> OfChannel(string channel) => channel switch
     {

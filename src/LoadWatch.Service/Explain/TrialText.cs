@@ -16,6 +16,8 @@ internal static class TrialText
 {
     private const string Sources = "Monod and Scherrer 1965, Ergonomics 8:329-338; Moritani et al. 1981, Ergonomics 24:339-350; three parameters: Morton 1996, Ergonomics 39:611-619";
 
+    private const string SpeedAsRecorded = "; speed as it was recorded, slopes not reckoned in: bests downhill raise the line, hilly routes lower it";
+
     /// <summary>Of the months whose values stand, and of the month of the date; nothing of a kind that no such line tells.</summary>
     /// <param name="observed">Of the person and the kind.</param>
     public static void Append(StringBuilder text, StoreSession session, Person person, AnchorKind kind, IReadOnlyList<ObservedAnchor> observed, LocalDate on)
@@ -45,7 +47,7 @@ internal static class TrialText
             }
         }
 
-        text.AppendLine(CultureInfo.InvariantCulture, $"    {(sports.Count == 0 ? $"no session of the {ObservedAnchors.Months} months before {Words.Date(month)} may tell it: {Wanted(quantity.Channel)}" : $"lines after {Sources}")}");
+        text.AppendLine(CultureInfo.InvariantCulture, $"    {(sports.Count == 0 ? $"no session of the {ObservedAnchors.Months} months before {Words.Date(month)} may tell it: {Wanted(quantity.Channel)}" : $"lines after {Sources}{(quantity.Channel == Channel.Speed ? SpeedAsRecorded : "")}")}");
     }
 
     private static CriticalQuantity? QuantityOf(AnchorKind kind) => kind switch

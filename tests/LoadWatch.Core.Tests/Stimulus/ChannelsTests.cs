@@ -141,10 +141,35 @@ public class ChannelsTests
         var legs = Of("cycling", Everything, (Channel.Power, power), (Channel.HeartRate, heartRate));
         var whole = Power(Given.Steps((200, 1000)));
 
-        Assert.Equal(("power", Grade.A), (legs.Channel, legs.Grade));
+        Assert.Equal(("power", Grade.D), (legs.Channel, legs.Grade));
+        Assert.True(legs is { HardBouts: null, LargeSeconds: null, SeesHardWork: false });
         Assert.Equal(whole.MediumSeconds!.Value.Mid, legs.MediumSeconds!.Value.Mid, 1);
         Assert.Equal(whole.SlowSeconds!.Value.Mid, legs.SlowSeconds!.Value.Mid, 1);
         Assert.Contains(legs.NotSeen, reason => reason.StartsWith("7 min without usable power", StringComparison.Ordinal));
+    }
+
+    /// <summary>A tenth of a session may be lost; of more it is not told that nothing hard was done there. A choice.</summary>
+    [Theory]
+    [InlineData(900, true)]
+    [InlineData(880, false)]
+    public void WhatWasNotSeenIsNotToldAsNotDone(int seconds, bool isKnown)
+    {
+        double[] power = [.. Enumerable.Repeat(200.0, seconds), .. Enumerable.Repeat(double.NaN, 1000 - seconds)];
+        var legs = Of("cycling", Everything, (Channel.Power, power), (Channel.Cadence, Given.Steps((80, 999))));
+
+        Assert.Equal((isKnown, isKnown), (legs.SeesHardWork, legs.LargeSeconds is not null));
+        Assert.Equal(isKnown ? Grade.A : Grade.D, legs.Grade);
+        Assert.Equal(!isKnown, legs.NotSeen.Any(reason => reason.StartsWith("12 % of the session without usable power: bouts and the largest class are unknown", StringComparison.Ordinal)));
+    }
+
+    [Fact]
+    public void HardWorkThatWasSeenStandsWhateverWasNot()
+    {
+        double[] power = [.. Given.Steps((100, 60), (900, 6), (100, 120), (900, 6), (100, 120), (900, 6), (100, 282)), .. Enumerable.Repeat(double.NaN, 400)];
+        var legs = Of("cycling", Everything, (Channel.Power, power), (Channel.Cadence, Given.Steps((80, 1000))));
+
+        Assert.Equal((3, Grade.D), (legs.HardBouts!.Value.Mid, legs.Grade));
+        Assert.Contains(legs.NotSeen, reason => reason.StartsWith("40 % of the session without usable power: bouts and the largest class are a lower bound", StringComparison.Ordinal));
     }
 
     [Fact]
@@ -192,12 +217,12 @@ public class ChannelsTests
         {
             var recording = Given.Recording("cycling", Given.EverySecond((Channel.Power, watts)));
             var (younger, older) = (Of(recording, Everything, Given.Date.Year - young), Of(recording, Everything, Given.Date.Year - old));
-            return younger.HardBouts!.Value.Mid == older.HardBouts!.Value.Mid
+            return younger.HardBouts?.Mid == older.HardBouts?.Mid && Seconds(younger).Length == Seconds(older).Length
                 && Seconds(younger).Zip(Seconds(older)).All(pair =>
                     pair.First.Mid == pair.Second.Mid && pair.Second.Low <= pair.First.Low + 1e-9 && pair.First.High <= pair.Second.High + 1e-9);
         });
 
-    private static Band[] Seconds(RegionStimulus legs) => [legs.SlowSeconds!.Value, legs.MediumSeconds!.Value, legs.LargeSeconds!.Value];
+    private static Band[] Seconds(RegionStimulus legs) => [.. new[] { legs.SlowSeconds!.Value, legs.MediumSeconds!.Value, legs.LargeSeconds }.OfType<Band>()];
 
     private static bool IsOrdered(EnduranceEstimate legs)
     {

@@ -218,10 +218,11 @@ public class SessionStimulusTests
         Gen.Double[0, 1500].Array[2, 200].Sample(watts =>
         {
             var legs = Of("cycling", Given.Cyclist, (Channel.Power, watts)).Regions[0];
-            Band[] bands = [legs.HardBouts!.Value, legs.SlowSeconds!.Value, legs.MediumSeconds!.Value, legs.LargeSeconds!.Value];
+            Band[] bands = [.. new[] { legs.HardBouts, legs.SlowSeconds!.Value, legs.MediumSeconds!.Value, legs.LargeSeconds }.OfType<Band>()];
             return Array.TrueForAll(bands, band => band.Low >= 0 && band.Low <= band.Mid && band.Mid <= band.High && double.IsFinite(band.High))
                 && legs.SlowSeconds.Value.Mid >= legs.MediumSeconds.Value.Mid
-                && legs.MediumSeconds.Value.Mid >= legs.LargeSeconds.Value.Mid;
+                && !(legs.MediumSeconds.Value.Mid < legs.LargeSeconds?.Mid)
+                && legs.HardBouts.HasValue == legs.LargeSeconds.HasValue;
         });
 
     private static SessionStimulus Of(string sport, Anchor[] anchors, params (Channel Channel, double[] Values)[] columns) =>

@@ -80,7 +80,10 @@ public sealed class ExplainDayTests : IDisposable
 
         var week = Numbers(told, "the 7 days to 2026-06-14: ");
         Assert.All(week, load => Assert.Equal(week[^1], load));
-        Assert.Equal(Numbers(told, "scaled to the covered ones = ")[0], week.Sum(), 0.01);
+        Assert.Equal(Numbers(told, "acute = sum of the known loads of 7 days x 7 / known days = ")[0], week.Sum(), 0.01);
+        Assert.Contains("for every session of the windows of this date: heart_rate_max = 210 bpm, measured, holds from 2026-06-14", told, StringComparison.Ordinal);
+        var finding = folder.Read((workplace, session) => FindingExplanation.Of(workplace.Configuration, session, "anna", "load_ratio", Some.Yesterday))!;
+        Assert.Contains("for every session of the windows of this date: heart_rate_max = 210 bpm, measured, holds from 2026-06-14", finding, StringComparison.Ordinal);
         Assert.NotEqual(Numbers(folder.Read((workplace, session) => DayExplanation.Of(workplace.Configuration, session, "anna", Some.Yesterday.PlusDays(-1)))!, "the 7 days to 2026-06-13: ")[^1], week[^1]);
     }
 

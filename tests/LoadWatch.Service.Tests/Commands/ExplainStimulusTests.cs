@@ -52,7 +52,7 @@ public sealed class ExplainStimulusTests : IDisposable
         var told = Told("bo");
 
         Assert.Contains("2 min at a drive of 0.65 or more, how long at 0.70 or more is not known (middle reading)", told, StringComparison.Ordinal);
-        Assert.Contains("assumed: every moment above critical power is read as fresh", told, StringComparison.Ordinal);
+        Assert.Contains("assumed: without a true maximum every moment above critical power is read as at it, a lower bound", told, StringComparison.Ordinal);
         Assert.DoesNotContain("least left", told, StringComparison.Ordinal);
     }
 
