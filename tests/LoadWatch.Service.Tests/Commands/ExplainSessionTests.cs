@@ -136,6 +136,23 @@ public sealed class ExplainSessionTests : IDisposable
     }
 
     [Fact]
+    public void ARatingThatStandsInWithoutALineIsNotCalledConverted()
+    {
+        folder.Edit("roster.csv", "time_zone", "time_zone,heart_rate_valid");
+        folder.Edit("roster.csv", "1996,f,UTC", "1996,f,UTC,");
+        folder.Edit("roster.csv", "1991,m,UTC", "1991,m,UTC,no");
+        folder.Edit("roster.csv", "1958,f,UTC", "1958,f,UTC,");
+        folder.Put("bo/ride.fit", Some.Fit(Some.Yesterday));
+        folder.PutTable("sessions.csv", 0, "date,person,session,sport,minutes,rating", $"{Some.Yesterday:uuuu-MM-dd},bo,1,cycling,,6");
+        folder.Sweep();
+
+        var told = AtNoon("bo");
+
+        Assert.Contains("counts in the series of banister_trimp with 12 AU, foster_load as it stands, in its own unit", told, StringComparison.Ordinal);
+        Assert.DoesNotContain("converted from", told, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void EveryQuantityHasAFormulaAndASource()
     {
         var equations = new LoadWatch.Activities.EquationChoices();
