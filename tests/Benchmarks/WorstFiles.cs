@@ -16,7 +16,7 @@ internal static class WorstFiles
     public static int Run()
     {
         var slowest = 0.0;
-        foreach (var (name, make) in WorstInputs.All)
+        foreach (var (name, make) in WorstInputs.All.Concat(WorstFits.All.Select(worst => ($"FIT: {worst.Name}", (Func<byte[]>)(() => worst.Make(WorstInputs.Bytes, WorstFits.Full))))))
         {
             var bytes = make();
             var megabytes = bytes.Length / 1048576.0;

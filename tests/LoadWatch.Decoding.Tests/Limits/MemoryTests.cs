@@ -1,7 +1,6 @@
 using System.Diagnostics;
 using System.Globalization;
 using LoadWatch.Decoding.Csv;
-using LoadWatch.Decoding.Fit;
 using LoadWatch.Decoding.Tests.Csv;
 using LoadWatch.Recordings;
 
@@ -9,12 +8,11 @@ namespace LoadWatch.Decoding.Tests.Limits;
 
 /// <summary>
 /// Reads the worst files in a process whose heap ends at the ceiling (I-11): 64 MB and four times the file, the test runner's own part included.
-/// The explicit tests are what the others start there.
+/// The two explicit tests are what the others start there.
 /// </summary>
 public class MemoryTests
 {
     private const long Ceiling = 64L << 20;
-    private const int LargestFit = 32 << 20;
 
     // LOADWATCH_LARGE_MB sets how large the file is that is read in flat memory.
     private static readonly int LargeMegabytes = int.Parse(Environment.GetEnvironmentVariable("LOADWATCH_LARGE_MB") ?? "160", CultureInfo.InvariantCulture);
@@ -23,33 +21,12 @@ public class MemoryTests
     public void NoWorstFileTakesMoreThanItsCeiling() => RunLimited(nameof(EveryWorstFileIsRead), Ceiling + (4L * WorstInputs.Bytes));
 
     [Fact]
-    public void NoWorstFitOfTheLargestSizeTakesMoreThanItsCeiling() => RunLimited(nameof(EveryWorstFitOfTheLargestSizeIsRead), Ceiling + (4L * LargestFit));
-
-    /// <summary>They are the worst as long as they are accepted and a few more of the same are refused, or fill the file.</summary>
-    [Fact]
-    public void TheWorstFitFilesAreAcceptedAndAlmostRefused()
-    {
-        Assert.All(WorstFits.All, worst => Assert.True(IsAccepted(worst.Make(LargestFit, WorstFits.Full)), worst.Name));
-        Assert.Equal(
-            WorstFits.LimitedBySize,
-            WorstFits.All.Where(worst => IsAccepted(worst.Make(LargestFit, 1.04))).Select(worst => worst.Name));
-    }
-
-    private static bool IsAccepted(byte[] file) => FitDecoder.Decode(file).Problems.All(problem => problem.Severity != ProblemSeverity.Error);
-
-    [Fact]
     public void ALargeFileIsReadInFlatMemory() => RunLimited(nameof(ALargeFileIsReadThrough), Ceiling);
 
     [Fact(Explicit = true)]
     public void EveryWorstFileIsRead()
     {
-        Assert.Equal("", string.Join(", ", WorstInputs.All.Where(worst => !IsReadWithin(worst.Make())).Select(worst => worst.Name)));
-    }
-
-    [Fact(Explicit = true)]
-    public void EveryWorstFitOfTheLargestSizeIsRead()
-    {
-        Assert.Equal("", string.Join(", ", WorstFits.All.Where(worst => !IsReadWithin(worst.Make(LargestFit, WorstFits.Full))).Select(worst => worst.Name)));
+        Assert.Empty(WorstInputs.All.Where(worst => !IsReadWithin(worst.Make())).Select(worst => worst.Name));
     }
 
     [Fact(Explicit = true)]

@@ -25,7 +25,7 @@ internal static class WorstFits
     /// <summary>How much of what the decoder keeps at most they take.</summary>
     public const double Full = 0.97;
 
-    /// <summary>Those of which no file of 32 MB holds as many as the decoder keeps.</summary>
+    /// <summary>Those of which no file holds as many as the decoder keeps.</summary>
     public static IReadOnlyList<string> LimitedBySize { get; } = ["empty parts"];
 
     /// <summary>Each made for a number of bytes, and for a share of what the decoder keeps at most of a file of that size.</summary>
@@ -60,7 +60,7 @@ internal static class WorstFits
     private static byte[] Walked(int minute, int counted) => [Local, .. BitConverter.GetBytes(Start + (60 * (uint)minute)), 6, .. BitConverter.GetBytes((uint)counted * 100)];
 
     /// <summary>How many of a thing the decoder takes, by what one of it costs.</summary>
-    private static int Messages(int bytes, double share, int cost) => (int)(share * ((20 << 20) + (bytes * 1.5)) / cost);
+    private static int Messages(int bytes, double share, int cost) => (int)(share * ((28 << 20) + (bytes * 1.5)) / cost);
 
     /// <summary>Made in the place where it stays: its making must take less memory than reading it.</summary>
     private static byte[] Fullest(int bytes, int messages, byte[] head, Func<int, byte[]> message)
@@ -87,7 +87,9 @@ internal static class WorstFits
         var file = new byte[bytes];
         var at = 0;
         for (var i = 0; i < most && at + part.Length <= bytes - Header - Rest; i++, at += part.Length)
+        {
             part.CopyTo(file, at);
+        }
 
         Close(file, at, at + Header);
         return file;

@@ -40,7 +40,6 @@ internal static class WorstInputs
         ("gzip of empty members", () => Repeated([], [0x1F, 0x8B, 8, 0, 0, 0, 0, 0, 0, 3, 3, 0, 0, 0, 0, 0, 0, 0, 0, 0], Bytes / 16)),
         ("zip of many entries", () => Packed.Zip([.. Enumerable.Range(0, 10_000).Select(i => ($"{i}.csv", Noise(700)))])),
         ("zip of one large entry", () => Packed.Zip(CompressionLevel.SmallestSize, ("a.csv", Packable()))),
-        .. WorstFits.All.Select(worst => ($"FIT: {worst.Name}", (Func<byte[]>)(() => worst.Make(Bytes, WorstFits.Full)))),
     ];
 
     /// <summary>What the pipeline does with a content: unpacked or decoded, one after the other.</summary>
