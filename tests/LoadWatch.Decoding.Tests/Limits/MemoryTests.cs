@@ -26,7 +26,7 @@ public class MemoryTests
     [Fact(Explicit = true)]
     public void EveryWorstFileIsRead()
     {
-        Assert.Empty(WorstInputs.All.Where(worst => !IsReadWithin(worst.Make())).Select(worst => worst.Name));
+        Assert.Empty(WorstInputs.All.Where(worst => !IsReadWithin(worst.Make)).Select(worst => worst.Name));
     }
 
     [Fact(Explicit = true)]
@@ -54,16 +54,27 @@ public class MemoryTests
         Assert.Equal((people * days, (long)people * days * SquadStream.RowsOfSession), (recordings, rows));
     }
 
-    private static bool IsReadWithin(byte[] bytes)
+    /// <summary>
+    /// The garbage of its making, and of those before, is no part of what reading takes. On a busy machine the collector has come too late for a file that took 72 MB
+    /// of 96: what truly takes too much does so again.
+    /// </summary>
+    private static bool IsReadWithin(Func<byte[]> make)
     {
-        try
+        var bytes = make();
+        return IsRead() || IsRead();
+
+        bool IsRead()
         {
-            WorstInputs.Read(bytes);
-            return true;
-        }
-        catch (OutOfMemoryException)
-        {
-            return false;
+            GC.Collect(GC.MaxGeneration, GCCollectionMode.Aggressive, blocking: true, compacting: true);
+            try
+            {
+                WorstInputs.Read(bytes);
+                return true;
+            }
+            catch (OutOfMemoryException)
+            {
+                return false;
+            }
         }
     }
 
