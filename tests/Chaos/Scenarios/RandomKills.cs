@@ -8,7 +8,7 @@ namespace LoadWatch.Chaos.Scenarios;
 /// <summary>SIGKILL at any moment of sweeps and of the running service, start-up and mail included; several on the way of one store before it is compared.</summary>
 public static class RandomKills
 {
-    private const int Short = 60;
+    private const int Short = 45;
     private const int Long = 5000;
     private const int MostOfOneStore = 5;
     private const int Workers = 2;
