@@ -39,7 +39,8 @@ internal static class DayTrendText
         text.AppendLine(CultureInfo.InvariantCulture, $"        in 7 days {Number(state.Days7)} ({state.Known7} known), in 14 days {Number(state.Days14)} ({state.Known14} known, usually {Number(state.Usual14)}), in 28 days {Number(state.Days28)} ({state.Known28} known)");
     }
 
-    private static void Line(StringBuilder text, string name, double? value) => text.AppendLine(CultureInfo.InvariantCulture, $"    {name} = {Number(value)}");
+    /// <summary>A figure of a day with its name, on a line of its own.</summary>
+    internal static void Line(StringBuilder text, string name, double? value) => text.AppendLine(CultureInfo.InvariantCulture, $"    {name} = {Number(value)}");
 
-    private static string Number(double? value) => value is { } known ? known.ToString("0.###", CultureInfo.InvariantCulture) : "unknown";
+    internal static string Number(double? value) => value is { } known ? known.ToString("0.###", CultureInfo.InvariantCulture) : "unknown";
 }

@@ -4,6 +4,7 @@ using LoadWatch.Days;
 using LoadWatch.People;
 using LoadWatch.Service.Export;
 using NodaTime;
+using static LoadWatch.Service.Explain.DayTrendText;
 
 namespace LoadWatch.Service.Explain;
 
@@ -55,8 +56,4 @@ internal static class LoadTrendText
             text.AppendLine(CultureInfo.InvariantCulture, $"        both start with the first known load, that of {Words.Date(day.Date.PlusDays(-ago))}, and stay as they were over an unknown day (a choice)");
         }
     }
-
-    private static void Line(StringBuilder text, string name, double? value) => text.AppendLine(CultureInfo.InvariantCulture, $"    {name} = {Number(value)}");
-
-    private static string Number(double? value) => value is { } known ? known.ToString("0.###", CultureInfo.InvariantCulture) : "unknown";
 }
