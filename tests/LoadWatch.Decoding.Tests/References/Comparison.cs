@@ -6,6 +6,9 @@ namespace LoadWatch.Decoding.References;
 /// <summary>Holds what two decoders give of one part against each other, value by value. What differs has a kind whose cause is in the bytes, or is a fault.</summary>
 internal sealed class Comparison(ReferencePart ours, ReferencePart theirs, PartFeatures features)
 {
+    /// <summary>The least count of seconds that is a date, as milliseconds since 1970.</summary>
+    private const double FirstDate = (0x10000000 + 631_065_600.0) * 1000;
+
     private readonly List<string> faults = [];
 
     /// <summary>The kinds of difference that were met.</summary>
@@ -42,8 +45,9 @@ internal sealed class Comparison(ReferencePart ours, ReferencePart theirs, PartF
         Sessions();
         Records();
         Sets();
-        Same("laps", ours.Laps.Count, theirs.Laps.Count);
-        Same("lengths", ours.Lengths.Count, theirs.Lengths.Count);
+        Counts("laps", ours.LapsBySession, theirs.Laps);
+        Counts("lengths", ours.LengthsBySession, theirs.Lengths);
+        Pauses();
         Lists("beats", ours.Beats, [.. theirs.Beats.Where(rate => rate is > 0)]);
         Lists("intervals", ours.Intervals, [.. theirs.Intervals.Where(interval => interval is not null)]);
         if (ours.Activity is [_, { } offset] && theirs.Activity is [{ } utc, { } local])
@@ -81,19 +85,83 @@ internal sealed class Comparison(ReferencePart ours, ReferencePart theirs, PartF
     /// <summary>Their records by the session that each belongs to: the last begun at or before it, else the first; one without a time stays with the one before.</summary>
     private IEnumerable<double?[]> InOurOrder()
     {
-        var starts = theirs.Sessions.Select((session, index) => (Start: session.Start ?? double.MinValue, index)).OrderBy(session => session.Start).ToList();
-        if (starts.Count < 2)
+        if (theirs.Sessions.Count < 2)
             return theirs.Records;
 
-        var owner = starts[0].index;
+        var owner = OwnerOf(null);
         var owned = new List<(int Owner, double?[] Record)>();
         foreach (var record in theirs.Records)
         {
-            owner = record[0] is { } time ? starts.LastOrDefault(session => session.Start <= time, starts[0]).index : owner;
+            owner = record[0] is { } time ? OwnerOf(time) : owner;
             owned.Add((owner, record));
         }
 
         return owned.OrderBy(record => record.Owner).Select(record => record.Record);
+    }
+
+    /// <summary>The session of theirs that a moment belongs to; what has no time belongs to the first.</summary>
+    private int OwnerOf(double? time)
+    {
+        var starts = theirs.Sessions.Select((session, index) => (Start: session.Start ?? double.MinValue, index)).OrderBy(session => session.Start).ToList();
+        return starts.Count == 0 ? 0 : starts.LastOrDefault(session => session.Start <= time, starts[0]).index;
+    }
+
+    /// <summary>How many laps or lengths begin in each session.</summary>
+    private void Counts(string what, IReadOnlyList<int> own, IReadOnlyList<double?> begun)
+    {
+        var counts = new int[Math.Max(1, theirs.Sessions.Count)];
+        foreach (var time in begun)
+            counts[OwnerOf(time)]++;
+
+        Same($"all {what}", own.Sum(), begun.Count);
+        foreach (var ((one, its), i) in own.Zip(counts).Select((pair, i) => (pair, i)))
+            Times($"{what} of session {i}", one, its);
+    }
+
+    /// <summary>
+    /// The timer stands from the first stop to the next start. A stop that no start follows is a pause where the session has a record behind it. What happens
+    /// at a time that is no date is no pause of ours.
+    /// </summary>
+    private void Pauses()
+    {
+        var their = Standing().Select(pause => (Owner: OwnerOf(pause[0]), Pause: pause)).ToList();
+        for (var i = 0; i < ours.PausesBySession.Count; i++)
+        {
+            var own = ours.PausesBySession[i];
+            var last = InSession(i).Max(record => record[0]);
+            double?[][] other = [.. their.Where(pause => pause.Owner == i).Select(pause => pause.Pause).Where(pause => pause[1] is not null || last > pause[0]).OrderBy(pause => pause[0])];
+            if (own.Count != other.Length && theirs.Timer.Any(entry => entry.Time < FirstDate) && Excused(Difference.NotADate))
+                continue;
+
+            Same($"pauses of session {i}", own.Count, other.Length);
+            foreach (var (one, its) in own.Zip(other))
+            {
+                Times($"start of a pause of session {i}", one[0], its[0]);
+                Times($"end of a pause of session {i}", one[1], its[1]);
+            }
+        }
+    }
+
+    private IEnumerable<double?[]> InSession(int session) => theirs.Records.Where(record => record[0] is { } time && OwnerOf(time) == session);
+
+    private IEnumerable<double?[]> Standing()
+    {
+        double? stopped = null;
+        foreach (var entry in theirs.Timer.Where(entry => entry.Time is not null))
+        {
+            if (entry.Type is "stop" or "stop_all" or "stop_disable" or "stop_disable_all")
+                stopped ??= entry.Time;
+            else if (entry.Type == "start")
+            {
+                if (stopped < entry.Time)
+                    yield return [stopped, entry.Time];
+
+                stopped = null;
+            }
+        }
+
+        if (stopped is not null)
+            yield return [stopped, null];
     }
 
     private void Sets()
@@ -122,15 +190,19 @@ internal sealed class Comparison(ReferencePart ours, ReferencePart theirs, PartF
             Same(what, own, other);
     }
 
+    /// <summary>Times are whole milliseconds and must be the same to the last.</summary>
     private void Times(string what, double? own, double? other)
     {
         if (own is null && other is not null && Excused(Difference.NotADate))
             return;
 
-        if (!IsSame(own, other) && Excused(Difference.CompressedTimes))
+        if (own != other && Excused(Difference.CompressedTimes))
             return;
 
-        Same(what, own, other);
+        if (own == other)
+            Equal++;
+        else
+            faults.Add(string.Create(CultureInfo.InvariantCulture, $"{what}: {own} and {other}"));
     }
 
     private bool Excused(Difference kind) => features.Kinds.Contains(kind) && (Met.Add(kind) || true);

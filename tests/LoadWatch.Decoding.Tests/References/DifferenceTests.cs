@@ -1,3 +1,4 @@
+using System.Reflection;
 using LoadWatch.Decoding.Fit;
 using static LoadWatch.Decoding.Fit.FitBaseType;
 
@@ -15,6 +16,19 @@ public class DifferenceTests
 
     [Fact]
     public void ThereAreNoMoreThanTwelve() => Assert.InRange(Enum.GetValues<Difference>().Length, 1, 12);
+
+    [Fact]
+    public void EachNamesASectionAndHasATest()
+    {
+        var tests = typeof(DifferenceTests).GetMethods().Where(method => method.IsDefined(typeof(FactAttribute))).Select(method => method.Name).ToList();
+        Assert.All(Enum.GetNames<Difference>(), kind =>
+        {
+            var section = typeof(Difference).GetField(kind)!.GetCustomAttribute<SectionAttribute>();
+            Assert.InRange(section?.Number ?? 0, 1, 20);
+            Assert.NotEmpty(section!.Subject);
+            Assert.Contains(tests, test => test.StartsWith(kind, StringComparison.Ordinal));
+        });
+    }
 
     [Fact]
     public void ReservedBitsOfAHeader()

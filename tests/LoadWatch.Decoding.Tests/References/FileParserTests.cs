@@ -51,12 +51,34 @@ public class FileParserTests
     [Fact]
     public void TheComparisonFindsOneChangedValue()
     {
+        FileParser.SkipUnlessThere();
         var part = GeneratedPart.Make(3, GeneratedStyle.Usual);
-        var (ours, theirs) = (OurParts.Read(part), OurParts.Read(part));
+        var (ours, theirs) = (OurParts.Read(part), FileParser.Read([part])[0]);
         Assert.Empty(new Comparison(ours, theirs, PartFeatures.Of(part)).Run());
         var row = theirs.Records.Select((record, index) => (record, index)).First(row => row.record[6] is not null);
         row.record[6] += 0.2;
         Assert.StartsWith($"Altitude of record {row.index}", Assert.Single(new Comparison(ours, theirs, PartFeatures.Of(part)).Run()), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void TheComparisonFindsAPauseThatIsNotGivenAndALapInAnotherSession()
+    {
+        FileParser.SkipUnlessThere();
+        var parts = Enumerable.Range(0, Generated).Select(number => GeneratedPart.Make(number, GeneratedStyle.Usual)).ToList();
+        var (part, theirs) = parts.Zip(FileParser.Read(parts)).First(pair =>
+            !PartFeatures.Of(pair.First).Kinds.Contains(Difference.CompressedTimes)
+            && pair.Second.Sessions.Count == 2
+            && OurParts.Read(pair.First) is { Sessions.Count: 2 } read
+            && read.LapsBySession[0] != read.LapsBySession[1]
+            && read.PausesBySession.Any(pauses => pauses.Any(pause => pause[1] is not null)));
+        var ours = OurParts.Read(part);
+        var moved = theirs with { Timer = [.. theirs.Timer.Select(entry => entry with { Time = entry.Time + 1000 })] };
+        Assert.Empty(new Comparison(ours, theirs, PartFeatures.Of(part)).Run());
+        Assert.Contains(new Comparison(ours, moved, PartFeatures.Of(part)).Run(), fault => fault.Contains("of a pause of session", StringComparison.Ordinal));
+        Assert.Contains(new Comparison(ours, theirs with { Timer = [] }, PartFeatures.Of(part)).Run(), fault => fault.StartsWith("pauses of session", StringComparison.Ordinal));
+        Assert.Contains(
+            new Comparison(ours with { LapsBySession = [.. ours.LapsBySession.Reverse()] }, theirs, PartFeatures.Of(part)).Run(),
+            fault => fault.StartsWith("laps of session", StringComparison.Ordinal));
     }
 
     [Fact]

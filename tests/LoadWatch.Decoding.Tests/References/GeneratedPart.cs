@@ -34,6 +34,9 @@ internal sealed class GeneratedPart
         new(8, Bytes, 3), new(3, Unsigned16), new(7, Unsigned32), new(6, Unsigned32), new(5, Real32), new(2, Signed32), new(78, Unsigned16), new(4, Unsigned8, 3), new(7, Unsigned16, 2), new(73, Unsigned64),
     ];
 
+    /// <summary>Words by which a timer stops.</summary>
+    private static readonly int[] Stops = [1, 4, 4, 8, 9];
+
     private readonly Random random;
     private readonly GeneratedStyle style;
     private readonly bool? order;
@@ -137,7 +140,7 @@ internal sealed class GeneratedPart
                 writer.Define(14, With(0xFF00 + random.Next(100), new(1, Unsigned32, 1 + random.Next(4)), new(2, Text, 3))).Message(14, random.Next(), "ab");
                 break;
             case 1:
-                writer.Define(14, With(21, new(253, Unsigned32), new(0, Enumeration), new(1, Enumeration))).Message(14, now, 0, OneIn(2) ? 4 : 0);
+                writer.Define(14, With(21, new(253, Unsigned32), new(0, Enumeration), new(1, Enumeration))).Message(14, now, 0, OneIn(2) ? Stops[random.Next(Stops.Length)] : 0);
                 break;
             default:
                 writer.Define(14, With(78, new FitFieldLayout(0, Unsigned16, 5))).Message(14, FitValue.Many([random.Next(300, 2000), random.Next(300, 65535), null, null, null]));

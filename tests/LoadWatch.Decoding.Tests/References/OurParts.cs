@@ -26,8 +26,10 @@ internal static class OurParts
             set.Start?.ToUnixTimeMilliseconds(), set.DurationSeconds, set.Active, set.Exercise, set.Repetitions, set.Kilograms))],
         Beats = [.. file.Recordings.SelectMany(recording => recording.LateHeartRates).Select(beat => (double?)beat.BeatsPerMinute)],
         Intervals = [.. file.Recordings.SelectMany(recording => recording.BeatIntervals).Select(milliseconds => milliseconds / 1000.0)],
-        Laps = [.. Enumerable.Repeat<double?>(null, file.Recordings.Sum(recording => recording.Laps))],
-        Lengths = [.. Enumerable.Repeat<double?>(null, file.Recordings.Sum(recording => recording.Lengths))],
+        LapsBySession = [.. file.Recordings.Select(recording => recording.Laps)],
+        LengthsBySession = [.. file.Recordings.Select(recording => recording.Lengths)],
+        PausesBySession = [.. file.Recordings.Select(recording => (IReadOnlyList<double?[]>)[.. recording.Pauses.Select(pause => (double?[])
+            [pause.Start.ToUnixTimeMilliseconds(), pause.End?.ToUnixTimeMilliseconds()])])],
         Activity = file.Recordings.Select(recording => recording.LocalOffset).FirstOrDefault() is { } offset ? [0, offset.Seconds * 1000.0] : null,
     };
 

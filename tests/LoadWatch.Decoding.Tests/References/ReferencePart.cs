@@ -22,9 +22,21 @@ internal sealed record ReferencePart
 
     public IReadOnlyList<ReferenceSet> Sets { get; init; } = [];
 
+    /// <summary>When each lap of the reference began. LoadWatch keeps their number by session: <see cref="LapsBySession"/>.</summary>
     public IReadOnlyList<double?> Laps { get; init; } = [];
 
+    /// <summary>When each length of the reference began.</summary>
     public IReadOnlyList<double?> Lengths { get; init; } = [];
+
+    public IReadOnlyList<int> LapsBySession { get; init; } = [];
+
+    public IReadOnlyList<int> LengthsBySession { get; init; } = [];
+
+    /// <summary>The timer's stops and starts as the reference gives them.</summary>
+    public IReadOnlyList<TimerEntry> Timer { get; init; } = [];
+
+    /// <summary>Pauses of each session as LoadWatch gives them: start, and end or null.</summary>
+    public IReadOnlyList<IReadOnlyList<double?[]>> PausesBySession { get; init; } = [];
 
     /// <summary>Heart rates of hr messages, beats per minute.</summary>
     public IReadOnlyList<double?> Beats { get; init; } = [];
@@ -48,5 +60,7 @@ internal sealed record ReferenceSession(
     double? Distance);
 
 internal sealed record ReferenceSet(double? Start, double? Duration, bool Active, string? Category, double? Repetitions, double? Weight);
+
+internal sealed record TimerEntry(double? Time, string? Type);
 
 internal sealed record MonitoredEntry(double? Time, double? HeartRate, double? Cycles, string? Kind);
