@@ -12,7 +12,8 @@ public static class LoadConversion
     /// <summary>With fewer sessions that have both there is no line. A choice.</summary>
     public const int FewestPairs = 10;
 
-    private const int Months = 12;
+    /// <summary>Before the month of a line, from which its pairs come. A choice.</summary>
+    public const int Months = 12;
 
     /// <summary>
     /// The line for the month of <paramref name="date"/>, or null: too few pairs, x that does not vary, or y that does not rise with x.

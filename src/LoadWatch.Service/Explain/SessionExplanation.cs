@@ -242,28 +242,20 @@ public sealed class SessionExplanation
             _ => $", converted from {kept.ConvertedFrom}",
         };
         Line($"counts in the series of {group.LoadQuantity} with {load}{way}{(kept.AddsLoad ? "" : ", not added: counted elsewhere")}");
-        if (kept is { ConvertedFrom: { } source, Load: { } value } && activity[source] is { } x && LineOf(activity.Date, group.LoadQuantity, source) is { } line && line.Apply(x) == value)
+        if (kept is { ConvertedFrom: { } source, Load: { } value } && activity[source] is { } x && LineOf(activity.Date, kept) is { } line && line.Apply(x) == value)
         {
             Below(string.Create(CultureInfo.InvariantCulture, $"{line.Intercept:0.###} + {line.Slope:0.####} x {x:0.###}: least squares through {line.Pairs} own sessions that have both, {Words.Date(line.Since)} to {Words.Date(line.Before.PlusDays(-1))}; standard error {line.StandardError:0.###}"));
         }
     }
 
-    /// <summary>That of the month; while heart rate is not valid the last that there was goes on.</summary>
-    private ConversionLine? LineOf(LocalDate date, string wanted, string from)
+    private ConversionLine? LineOf(LocalDate date, DaySession kept)
     {
-        var month = date.PlusDays(1 - date.Day);
-        var oldest = person.HeartRateIsValidOn(date) ? month : month.PlusMonths(1 - LoadOrder.LastLineMonths);
-        var days = session.Days.Before(person.Id, month, oldest.PlusMonths(-12)).SelectMany(day => day.Sessions.Select(one => one.On(day.Date)));
-        List<SessionLoads> loads = [.. days.Select(one => new SessionLoads(one.Date, one.Quantities))];
-        for (; month >= oldest; month = month.PlusMonths(-1))
-        {
-            if (LoadConversion.For(loads, month, wanted, from) is { } line)
-            {
-                return line;
-            }
-        }
-
-        return null;
+        var group = configuration.GroupOf(person);
+        var first = date.PlusDays(1 - date.Day).PlusMonths(1 - LoadOrder.LastLineMonths - LoadConversion.Months);
+        var before = session.Days.Before(person.Id, date, first).SelectMany(day => day.Sessions.Select(one => one.On(day.Date)));
+        var order = new LoadOrder(
+            group.LoadQuantity, group.LoadFallbacks, [.. before.Select(one => new SessionLoads(one.Date, one.Quantities))], person.HeartRateIsValidOn);
+        return order.Choose(new SessionLoads(date, kept.On(date).Quantities))?.Line;
     }
 
     private void AppendZones(StoredActivity? recorded)
