@@ -31,7 +31,7 @@ const values = data => ({
   intervals: data.hrv.flatMap(of => of.time ?? []),
   timer: data.events.filter(of => of.event === 'timer').map(of => ({ time: time(of.timestamp), type: word('event_type', of.event_type) })),
   activity: data.activity ? [time(data.activity.timestamp), time(data.activity.local_timestamp)] : null,
-  monitored: data.monitors.map(of => [time(of.timestamp), some(of.heart_rate), some(of.steps ?? of.cycles), some(of.activity_type)]),
+  monitored: data.monitors.map(of => ({ time: time(of.timestamp), heartRate: some(of.heart_rate), cycles: some(of.cycles), kind: word('activity_type', of.activity_type) })),
 });
 
 const read = file => {

@@ -47,7 +47,7 @@ internal sealed record ReferencePart
     /// <summary>Time of the activity message and what it states as local time.</summary>
     public double?[]? Activity { get; init; }
 
-    /// <summary>Time, heart rate, steps, kind of movement of monitoring messages.</summary>
+    /// <summary>Time, heart rate, counted cycles and kind of movement of monitoring messages, as the reference gives them.</summary>
     public IReadOnlyList<MonitoredEntry> Monitored { get; init; } = [];
 }
 
