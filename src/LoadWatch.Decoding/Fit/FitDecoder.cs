@@ -138,10 +138,11 @@ public sealed class FitDecoder
             problems.Add(new Problem(ProblemSeverity.Warning, reason, offset));
         }
         else if (content.HasOnlyBeats)
-            pending!.Late.Beats.AddRange(content.Late.Beats.Items);
+            pending!.Late.Beats.AddRange(content.Late.Beats);
         else if (content.HasTraining)
         {
             Settle();
+            budget.Spend(content.Sessions.Count == 0 ? PartContent.SessionCost : 0);
             pending = content;
             isBehindDamage = false;
         }

@@ -8,7 +8,8 @@ namespace LoadWatch.Decoding.Fit;
 /// </summary>
 internal sealed class LateBeats(MemoryBudget budget)
 {
-    private const int BytesPerBeat = 16;
+    /// <summary>As it is read, as it is handed out, and what putting in order takes.</summary>
+    private const int BeatCost = 80;
     private const int Mask = 0xFFF;
     private long? anchorTime;
     private uint anchorEvent;
@@ -69,6 +70,6 @@ internal sealed class LateBeats(MemoryBudget budget)
             return;
 
         Beats.Add((time + (unchecked(eventTime - anchorEvent) * 1000L / 1024), rates[index]));
-        budget.Spend(BytesPerBeat * 2);
+        budget.Spend(BeatCost);
     }
 }

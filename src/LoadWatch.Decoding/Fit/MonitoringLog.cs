@@ -6,7 +6,7 @@ namespace LoadWatch.Decoding.Fit;
 /// </summary>
 internal sealed class MonitoringLog(MemoryBudget budget)
 {
-    private const int MinuteCost = 80;
+    private const int MinuteCost = 160;
     private const int WalkedMinuteCost = 500;
     private const int LongestSpread = 15;
     private const int Running = 1;

@@ -5,10 +5,13 @@ namespace LoadWatch.Decoding.Fit;
 /// <summary>What one part says, times still as in the file: milliseconds of the FIT epoch or of the device's uptime.</summary>
 internal sealed class PartContent(MemoryBudget budget, DeveloperFields developer)
 {
-    private const int SessionCost = 1200;
-    private const int SetCost = 256;
+    /// <summary>What was read of a session, and its recording.</summary>
+    public const int SessionCost = 1200;
+
+    private const int SetCost = 320;
     private const int SmallCost = 64;
-    private const int IntervalCost = 80;
+    private const int EventCost = 128;
+    private const int IntervalCost = 32;
     private const int Quarter = 15 * 60;
     private const int MostOffsetSeconds = 18 * 3600;
 
@@ -25,11 +28,13 @@ internal sealed class PartContent(MemoryBudget budget, DeveloperFields developer
 
     public List<SessionFacts> Sessions { get; } = [];
 
-    public List<(long? Start, StrengthSet Set)> Sets { get; } = [];
+    public PooledList<SetFacts> Sets { get; } = new();
 
-    public List<long?> Laps { get; } = [];
+    /// <summary>When each began.</summary>
+    public PooledList<long?> Laps { get; } = new();
 
-    public List<long?> Lengths { get; } = [];
+    /// <summary>When each began.</summary>
+    public PooledList<long?> Lengths { get; } = new();
 
     /// <summary>Times from beat to beat with the last time before them in the file; they carry none of their own.</summary>
     public PooledList<(long? Time, int Milliseconds)> Intervals { get; } = new();
@@ -87,7 +92,7 @@ internal sealed class PartContent(MemoryBudget budget, DeveloperFields developer
                 break;
             case FitMessages.Event:
                 Pauses.Read(message, time);
-                budget.Spend(SmallCost);
+                budget.Spend(EventCost);
                 break;
             case FitMessages.Set:
                 ReadSet(message);
@@ -111,6 +116,10 @@ internal sealed class PartContent(MemoryBudget budget, DeveloperFields developer
         Samples.Return();
         Late.Beats.Return();
         Intervals.Return();
+        Sets.Return();
+        Laps.Return();
+        Lengths.Return();
+        Pauses.Closed.Return();
     }
 
     private static Sport SportOf(in FitMessage message, byte name, byte detail)
@@ -119,7 +128,7 @@ internal sealed class PartContent(MemoryBudget budget, DeveloperFields developer
         return message.Int(name) is { } sport ? new Sport(FitWords.Sports[sport], sub) : new Sport(Sport.Generic.Name, sub);
     }
 
-    private void Keep<T>(List<T> list, T item, int cost)
+    private void Keep<T>(PooledList<T> list, T item, int cost)
     {
         list.Add(item);
         budget.Spend(cost);
@@ -171,21 +180,22 @@ internal sealed class PartContent(MemoryBudget budget, DeveloperFields developer
         }
 
         var sport = SportOf(message, FitFields.Session.Sport, FitFields.Session.SubSport);
-        Keep(Sessions, new SessionFacts(message.Time(FitFields.Session.Start), sport, elapsed, timer, distance) { Shadowed = shadowed }, SessionCost);
+        Sessions.Add(new SessionFacts(message.Time(FitFields.Session.Start), sport, elapsed, timer, distance) { Shadowed = shadowed });
+        budget.Spend(SessionCost);
     }
 
     private void ReadSet(in FitMessage message)
     {
         var start = message.Time(FitFields.Set.Start) ?? message.Time(FitFields.Set.Timestamp);
         var category = message.Int(FitFields.Set.Category);
-        var set = new StrengthSet(
-            Start: null,
+        var set = new SetFacts(
+            start,
             message.Scaled(FitFields.Set.DurationMilliseconds, 1000),
-            Active: message.Int(FitFields.Set.Type) != 0,
+            message.Int(FitFields.Set.Type) != 0,
             category is { } number and not FitDecoder.UnknownExercise ? FitWords.ExerciseCategories[number] : null,
             message.Int(FitFields.Set.Repetitions),
             message.Scaled(FitFields.Set.WeightSixteenths, 16));
-        Keep(Sets, (start, set), SetCost);
+        Keep(Sets, set, SetCost);
     }
 
     private void ReadIntervals(in FitMessage message, long? time)
@@ -218,3 +228,6 @@ internal sealed record SessionFacts(long? Start, Sport Sport, double? ElapsedSec
     /// <summary>Totals that developer fields state beside it.</summary>
     public Shadowed Shadowed { get; init; } = Shadowed.None;
 }
+
+/// <summary>What a set message says; null where it does not.</summary>
+internal readonly record struct SetFacts(long? Start, double? DurationSeconds, bool Active, string? Exercise, int? Repetitions, double? Kilograms);

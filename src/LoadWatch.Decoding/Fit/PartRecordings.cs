@@ -25,29 +25,26 @@ internal sealed class PartRecordings
 
     private List<Recording> Build(int firstPart)
     {
-        var samples = SampleSplit.Of(content.Samples, content.Clock, owners);
-        var shadowed = SampleSplit.Shadowed(content.Samples, content.Clock, owners);
-        var sets = Shared(content.Sets, set => set.Start);
-        var laps = Shared(content.Laps, lap => lap);
-        var lengths = Shared(content.Lengths, length => length);
-        var pauses = Shared(content.Pauses.All, pause => pause.Start);
-        var intervals = Shared(content.Intervals.Items, interval => interval.Time, interval => interval.Milliseconds);
-        var beats = Shared(content.Late.Beats.Items, beat => beat.Time, Dated);
+        var split = new SampleSplit(content.Samples, owners);
+        var shadowed = split.Shadowed();
+        var samples = split.HandOver(content.Clock);
+        var sets = Shared(content.Sets, set => set.Start, Dated);
+        var (laps, lengths) = (Counts(content.Laps, lap => lap), Counts(content.Lengths, length => length));
+        var pauses = Shared(content.Pauses.Closed, pause => pause.Start, Dated);
+        var intervals = Shared(content.Intervals, interval => interval.Time, interval => interval.Milliseconds);
+        var beats = Shared(content.Late.Beats, beat => beat.Time, Dated);
         return [.. sessions.Select((session, i) => Basics(session, samples[i]) with
         {
             Part = firstPart + i,
-            Sets = [.. sets[i].Select(set => set.Set with { Start = content.Clock.Instant(set.Start) })],
-            Laps = laps[i].Count,
-            Lengths = lengths[i].Count,
-            Pauses = Pauses(pauses[i], samples[i]),
+            Sets = sets[i],
+            Laps = laps[i],
+            Lengths = lengths[i],
+            Pauses = Pauses(pauses[i], i, samples[i]),
             LateHeartRates = InTimeOrder(beats[i]),
             BeatIntervals = intervals[i],
-            Shadowed = shadowed is null ? session.Shadowed : session.Shadowed with { Channels = Statistics(shadowed[i]) },
+            Shadowed = shadowed is null ? session.Shadowed : session.Shadowed with { Channels = shadowed[i] },
         })];
     }
-
-    private static Dictionary<Channel, ChannelStatistics> Statistics(SampleSeries samples) =>
-        samples.Channels.ToDictionary(channel => channel, channel => ChannelStatistics.Of(samples, channel));
 
     private Recording Basics(SessionFacts session, SampleSeries samples) => new()
     {
@@ -63,59 +60,72 @@ internal sealed class PartRecordings
         CutOff = content.CutOff,
     };
 
-    private List<T>[] Shared<T>(IEnumerable<T> items, Func<T, long?> time)
+    /// <summary>The stop that ends a recording is no pause: an open one counts only if samples follow it. What cannot be dated is left out.</summary>
+    private Pause[] Pauses(Pause?[] closed, int session, SampleSeries samples)
     {
-        var shared = sessions.ConvertAll(_ => new List<T>()).ToArray();
-        foreach (var item in items)
-            shared[owners.Of(time(item))].Add(item);
-
-        return shared;
-    }
-
-    /// <summary>The stop that ends a recording is no pause: an open one counts only if samples follow it.</summary>
-    private List<Pause> Pauses(List<(long Start, long? End)> stops, SampleSeries samples)
-    {
-        var pauses = new List<Pause>();
-        foreach (var (from, to) in stops)
+        var open = content.Pauses.Open is { } stop && owners.Of(stop) == session && content.Clock.Instant(stop) is { } start && samples.Last > start
+            ? new Pause(start, null)
+            : (Pause?)null;
+        var pauses = new Pause[closed.Count(pause => pause is not null) + (open is null ? 0 : 1)];
+        var count = 0;
+        foreach (var pause in closed.Append(open))
         {
-            if (content.Clock.Instant(from) is { } start && (to is not null || samples.Last > start))
-                pauses.Add(new Pause(start, content.Clock.Instant(to)));
+            if (pause is { } dated)
+                pauses[count++] = dated;
         }
 
-        return [.. pauses.OrderBy(pause => pause.Start)];
+        return InOrder(pauses, pause => pause.Start);
     }
 
-    /// <summary>The same for many items, each made into another, without a list that grows.</summary>
-    private TShared[][] Shared<T, TShared>(ReadOnlySpan<T> items, Func<T, long?> time, Func<T, TShared> made)
+    /// <summary>How many of the items belong to each session.</summary>
+    private int[] Counts<T>(PooledList<T> items, Func<T, long?> time)
     {
         var counts = new int[sessions.Count];
-        foreach (var item in items)
-            counts[owners.Of(time(item))]++;
+        for (var i = 0; i < items.Count; i++)
+            counts[owners.Of(time(items[i]))]++;
 
-        var shared = Array.ConvertAll(counts, count => count == 0 ? [] : new TShared[count]);
-        foreach (var item in items)
+        return counts;
+    }
+
+    /// <summary>The items of each session, each made into what is handed out.</summary>
+    private TShared[][] Shared<T, TShared>(PooledList<T> items, Func<T, long?> time, Func<T, TShared> made)
+    {
+        var left = Counts(items, time);
+        var shared = Array.ConvertAll(left, count => count == 0 ? [] : new TShared[count]);
+        for (var i = 0; i < items.Count; i++)
         {
-            var owner = owners.Of(time(item));
-            shared[owner][^counts[owner]--] = made(item);
+            var owner = owners.Of(time(items[i]));
+            shared[owner][^left[owner]--] = made(items[i]);
         }
 
         return shared;
     }
+
+    private Pause? Dated((long Start, long End) pause) =>
+        content.Clock.Instant(pause.Start) is { } start ? new Pause(start, content.Clock.Instant(pause.End)) : null;
+
+    private StrengthSet Dated(SetFacts set) =>
+        new(content.Clock.Instant(set.Start), set.DurationSeconds, set.Active, set.Exercise, set.Repetitions, set.Kilograms);
 
     private TimedHeartRate Dated((long Time, int BeatsPerMinute) beat) => new(content.Clock.UnixMilliseconds(beat.Time), beat.BeatsPerMinute);
 
     /// <summary>Beats that cannot be dated are left out.</summary>
     private static TimedHeartRate[] InTimeOrder(TimedHeartRate[] beats)
     {
-        for (var i = 1; i < beats.Length; i++)
+        var ordered = InOrder(beats, beat => beat.UnixMilliseconds);
+        return ordered is [{ UnixMilliseconds: SampleSeries.Undated }, ..] ? Array.FindAll(ordered, beat => beat.UnixMilliseconds != SampleSeries.Undated) : ordered;
+    }
+
+    /// <summary>As they are where they are in order, which is usual.</summary>
+    private static T[] InOrder<T, TKey>(T[] items, Func<T, TKey> key)
+        where TKey : IComparable<TKey>
+    {
+        for (var i = 1; i < items.Length; i++)
         {
-            if (beats[i].UnixMilliseconds < beats[i - 1].UnixMilliseconds)
-            {
-                beats = [.. beats.OrderBy(beat => beat.UnixMilliseconds)];
-                break;
-            }
+            if (key(items[i]).CompareTo(key(items[i - 1])) < 0)
+                return [.. items.OrderBy(key)];
         }
 
-        return beats is [{ UnixMilliseconds: SampleSeries.Undated }, ..] ? Array.FindAll(beats, beat => beat.UnixMilliseconds != SampleSeries.Undated) : beats;
+        return items;
     }
 }

@@ -1,51 +1,39 @@
 using System.Buffers;
+using System.Runtime.CompilerServices;
 
 namespace LoadWatch.Decoding.Fit;
 
-/// <summary>A list whose memory is lent and goes back at the end.</summary>
+/// <summary>A list in blocks, so that nothing of it is there twice while it grows. Its memory is lent and goes back at the end.</summary>
 internal sealed class PooledList<T>
-    where T : struct
 {
-    private const int First = 256;
-    private T[] items = [];
+    private const int BlockItems = 512;
+    private readonly List<T[]> blocks = [];
 
     public int Count { get; private set; }
 
-    public ReadOnlySpan<T> Items => items.AsSpan(0, Count);
+    public ref readonly T this[int index] => ref blocks[index / BlockItems][index % BlockItems];
 
     public void Add(T item)
     {
-        if (Count == items.Length)
-            Grow(Count + 1);
+        if (Count == blocks.Count * BlockItems)
+            blocks.Add(ArrayPool<T>.Shared.Rent(BlockItems));
 
-        items[Count++] = item;
+        blocks[^1][Count++ % BlockItems] = item;
     }
 
-    public void AddRange(ReadOnlySpan<T> more)
+    public void AddRange(PooledList<T> more)
     {
-        if (Count + more.Length > items.Length)
-            Grow(Count + more.Length);
-
-        more.CopyTo(items.AsSpan(Count));
-        Count += more.Length;
+        for (var i = 0; i < more.Count; i++)
+            Add(more[i]);
     }
 
     /// <summary>Gives the memory back; the list is empty then.</summary>
     public void Return()
     {
-        if (items.Length > 0)
-            ArrayPool<T>.Shared.Return(items);
+        foreach (var block in blocks)
+            ArrayPool<T>.Shared.Return(block, RuntimeHelpers.IsReferenceOrContainsReferences<T>());
 
-        (items, Count) = ([], 0);
-    }
-
-    private void Grow(int least)
-    {
-        var larger = ArrayPool<T>.Shared.Rent(Math.Max(First, Math.Max(least, items.Length * 2)));
-        Items.CopyTo(larger);
-        if (items.Length > 0)
-            ArrayPool<T>.Shared.Return(items);
-
-        items = larger;
+        blocks.Clear();
+        Count = 0;
     }
 }

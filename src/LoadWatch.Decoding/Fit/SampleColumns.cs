@@ -1,3 +1,4 @@
+using System.Numerics;
 using LoadWatch.Recordings;
 
 namespace LoadWatch.Decoding.Fit;
@@ -12,10 +13,16 @@ internal sealed class SampleColumns
     private SparseColumn<double>[]? shadowed;
     private PackedSpeedDistance packed;
 
+    /// <summary>Bits of the columns that hold a value.</summary>
+    private int begun;
+
+    /// <summary>Of a row in the columns that are handed out, each of which has all rows; the blocks that they are copied from are spent as they are lent.</summary>
+    private int rowBytes = sizeof(long);
+
     public SampleColumns(MemoryBudget budget)
     {
         this.budget = budget;
-        times = new(SampleSeries.Undated, sizeof(long), budget);
+        times = new(SampleSeries.Undated, budget);
         channels = Empty();
     }
 
@@ -42,7 +49,9 @@ internal sealed class SampleColumns
             filled = Unpack(payload.Slice(plan.PackedOffset, PackedSpeedDistance.Size), row, filled);
 
         if (plan.Developer.Length > 0)
-            FillByDeveloper(plan, payload, row, filled);
+            filled = FillByDeveloper(plan, payload, row, filled);
+
+        Spend(1, filled);
     }
 
     /// <summary>Adds the rows of a run, each channel of which has one source.</summary>
@@ -51,14 +60,20 @@ internal sealed class SampleColumns
         for (var row = 0; row < run.Rows; row++)
             times.Set(Count + row, run.Timestamp(row) is { } seconds ? seconds * 1000L : SampleSeries.Undated);
 
+        var filled = 0;
         foreach (ref readonly var source in run.Sources)
         {
             var last = run.Read(source, channels[(int)source.Channel], Count);
-            if (source.Channel == Channel.Distance && double.IsFinite(last))
+            if (!double.IsFinite(last))
+                continue;
+
+            filled |= 1 << (int)source.Channel;
+            if (source.Channel == Channel.Distance)
                 packed.Restart(last);
         }
 
         Count += run.Rows;
+        Spend(run.Rows, filled);
     }
 
     /// <summary>Gives all memory back; the columns are empty then.</summary>
@@ -74,9 +89,22 @@ internal sealed class SampleColumns
     {
         var columns = new SparseColumn<double>[ChannelCount];
         for (var i = 0; i < columns.Length; i++)
-            columns[i] = new(double.NaN, sizeof(double), budget);
+            columns[i] = new(double.NaN, budget);
 
         return columns;
+    }
+
+    /// <summary>A column that begins late takes the rows before it too.</summary>
+    private void Spend(int rows, int filled)
+    {
+        budget.Spend((long)rows * rowBytes);
+        if ((filled & ~begun) is not (not 0 and var more))
+            return;
+
+        var bytes = BitOperations.PopCount((uint)more) * sizeof(double);
+        budget.Spend((long)Count * bytes);
+        rowBytes += bytes;
+        begun |= more;
     }
 
     private int Fill(ChannelSource[] sources, MessagePlan plan, ReadOnlySpan<byte> payload, int row, int filled)
@@ -90,7 +118,7 @@ internal sealed class SampleColumns
         return filled;
     }
 
-    private void FillByDeveloper(MessagePlan plan, ReadOnlySpan<byte> payload, int row, int filled)
+    private int FillByDeveloper(MessagePlan plan, ReadOnlySpan<byte> payload, int row, int filled)
     {
         foreach (ref readonly var source in plan.Developer.AsSpan())
         {
@@ -103,6 +131,8 @@ internal sealed class SampleColumns
             else
                 filled |= Set(source.Channel, row, value);
         }
+
+        return filled;
     }
 
     private int Unpack(ReadOnlySpan<byte> bytes, int row, int filled)

@@ -1,11 +1,12 @@
 using System.Buffers;
+using System.Runtime.CompilerServices;
 
 namespace LoadWatch.Decoding.Fit;
 
 /// <summary>
 /// One value per row in blocks, set from the first row to the last; a block in which nothing was set takes no memory. Blocks are lent and go back at the end.
 /// </summary>
-internal sealed class SparseColumn<T>(T missing, int bytesPerValue, MemoryBudget budget)
+internal sealed class SparseColumn<T>(T missing, MemoryBudget budget)
     where T : struct
 {
     private const int BlockBits = 11;
@@ -88,9 +89,10 @@ internal sealed class SparseColumn<T>(T missing, int bytesPerValue, MemoryBudget
         (currentIndex, written) = (index, 0);
     }
 
+    /// <summary>The first block goes from part to part, however many they are.</summary>
     private T[] Lend()
     {
-        budget.Spend((long)BlockRows * bytesPerValue);
+        budget.Spend(currentIndex < 0 ? 0 : (long)BlockRows * Unsafe.SizeOf<T>());
         return ArrayPool<T>.Shared.Rent(BlockRows);
     }
 }

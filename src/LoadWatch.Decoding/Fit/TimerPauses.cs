@@ -7,10 +7,11 @@ internal sealed class TimerPauses
     private const int Started = 0;
     private long? stopped;
 
-    /// <summary>Pauses in file order, times as in the file; the end of the last is null when the timer was not started again.</summary>
-    public IEnumerable<(long Start, long? End)> All => stopped is { } open ? [.. Closed, (open, null)] : Closed;
+    /// <summary>Pauses in file order, times as in the file.</summary>
+    public PooledList<(long Start, long End)> Closed { get; } = new();
 
-    private List<(long Start, long? End)> Closed { get; } = [];
+    /// <summary>When the timer stopped and was not started again, or null.</summary>
+    public long? Open => stopped;
 
     public void Read(in FitMessage message, long? time)
     {

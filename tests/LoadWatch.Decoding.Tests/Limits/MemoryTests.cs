@@ -8,17 +8,26 @@ namespace LoadWatch.Decoding.Tests.Limits;
 
 /// <summary>
 /// Reads the worst files in a process whose heap ends at the ceiling (I-11): 64 MB and four times the file, the test runner's own part included.
-/// The two explicit tests are what the others start there.
+/// The explicit tests are what the others start there.
 /// </summary>
 public class MemoryTests
 {
     private const long Ceiling = 64L << 20;
+
+    /// <summary>Larger files are refused before they are read.</summary>
+    private const int GreatestBytes = 32 << 20;
 
     // LOADWATCH_LARGE_MB sets how large the file is that is read in flat memory.
     private static readonly int LargeMegabytes = int.Parse(Environment.GetEnvironmentVariable("LOADWATCH_LARGE_MB") ?? "160", CultureInfo.InvariantCulture);
 
     [Fact]
     public void NoWorstFileTakesMoreThanItsCeiling() => RunLimited(nameof(EveryWorstFileIsRead), Ceiling + (4L * WorstInputs.Bytes));
+
+    [Fact]
+    public void NoWorstFitTakesMoreThanItsCeiling() => RunLimited(nameof(EveryWorstFitIsRead), Ceiling + (4L * WorstInputs.Bytes));
+
+    [Fact]
+    public void NoWorstFitOfTheGreatestSizeTakesMoreThanItsCeiling() => RunLimited(nameof(EveryGreatestFitIsRead), Ceiling + (4L * GreatestBytes));
 
     [Fact]
     public void ALargeFileIsReadInFlatMemory() => RunLimited(nameof(ALargeFileIsReadThrough), Ceiling);
@@ -28,6 +37,12 @@ public class MemoryTests
     {
         Assert.Empty(WorstInputs.All.Where(worst => !IsReadWithin(worst.Make)).Select(worst => worst.Name));
     }
+
+    [Fact(Explicit = true)]
+    public void EveryWorstFitIsRead() => Assert.Empty(WorstFits.All.Where(worst => !IsReadWithin(() => worst.Make(WorstInputs.Bytes, WorstFits.Full))).Select(worst => worst.Name));
+
+    [Fact(Explicit = true)]
+    public void EveryGreatestFitIsRead() => Assert.Empty(WorstFits.All.Where(worst => !IsReadWithin(() => worst.Make(GreatestBytes, WorstFits.Full))).Select(worst => worst.Name));
 
     [Fact(Explicit = true)]
     public void ALargeFileIsReadThrough()

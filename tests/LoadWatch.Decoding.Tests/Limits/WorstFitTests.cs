@@ -4,8 +4,7 @@ using LoadWatch.Recordings;
 namespace LoadWatch.Decoding.Tests.Limits;
 
 /// <summary>
-/// The files of <see cref="WorstFits"/> are the worst as long as they are accepted and a few more of the same are refused, or fill the file. That reading them stays
-/// within the ceiling of memory is not shown: see tests/README.md.
+/// The files of <see cref="WorstFits"/> are the worst as long as they are accepted and a few more of the same are refused, or fill the file. <see cref="MemoryTests"/> reads them.
 /// </summary>
 public class WorstFitTests
 {

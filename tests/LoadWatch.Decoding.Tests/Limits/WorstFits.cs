@@ -20,39 +20,51 @@ internal static class WorstFits
 
     private static byte[] Anchor { get; } = [0x42, 0, 0, 132, 0, 3, 253, 4, 0x86, 9, 4, 0x86, 6, 1, 2, 2, .. BitConverter.GetBytes(Start), 0, 0, 0, 0, 70];
 
+    /// <summary>A record of heart rate, power, speed, cadence, distance and altitude, behind its definition; the message is the last 13 bytes.</summary>
+    private static byte[] EveryChannel { get; } =
+        [0x41, 0, 0, 20, 0, 6, 3, 1, 2, 7, 2, 0x84, 6, 2, 0x84, 4, 1, 2, 5, 4, 0x86, 2, 2, 0x84, 1, 90, 200, 0, 16, 39, 80, 0, 0, 1, 0, 0, 12];
+
+    private static byte[] TwoSessions { get; } =
+        [0x42, 0, 0, 18, 0, 1, 2, 4, 0x86, 2, .. BitConverter.GetBytes(Start), 2, .. BitConverter.GetBytes(Start + 1)];
+
     private static byte[] Zone { get; } = [0x43, 0, 0, 103, 0, 2, 253, 4, 0x86, 0, 4, 0x86, 3, .. BitConverter.GetBytes(Start), .. BitConverter.GetBytes(Start)];
 
     /// <summary>How much of what the decoder keeps at most they take.</summary>
     public const double Full = 0.97;
 
     /// <summary>Those of which no file holds as many as the decoder keeps.</summary>
-    public static IReadOnlyList<string> LimitedBySize { get; } = ["empty parts"];
+    public static IReadOnlyList<string> LimitedBySize { get; } = ["records of two sessions by turns", "empty parts"];
 
     /// <summary>Each made for a number of bytes, and for a share of what the decoder keeps at most of a file of that size.</summary>
     public static IReadOnlyList<(string Name, Func<int, double, byte[]> Make)> All { get; } =
     [
-        ("records that say nothing", (bytes, share) => Fullest(bytes, Messages(bytes, share, 8), [0x40, 0, 0, 20, 0, 0], _ => [Local])),
-        ("records of two bytes", (bytes, share) => Fullest(bytes, Messages(bytes, share, 16), [0x40, 0, 0, 20, 0, 1, 3, 1, 2], _ => [Local, 90])),
+        ("records that say nothing", (bytes, share) => Fullest(bytes, Messages(bytes, share, 16), [0x40, 0, 0, 20, 0, 0], _ => [Local])),
+        ("records of two bytes", (bytes, share) => Fullest(bytes, Messages(bytes, share, 32), [0x40, 0, 0, 20, 0, 1, 3, 1, 2], _ => [Local, 90])),
+        ("every channel once, then records that say nothing", (bytes, share) => Fullest(bytes, Messages(bytes, share, 64), [.. EveryChannel, 0x40, 0, 0, 20, 0, 0], _ => [Local])),
+        ("records that say nothing, then every channel once", (bytes, share) => Fullest(
+            bytes, Messages(bytes, share, 64), [0x40, 0, 0, 20, 0, 0, .. EveryChannel[..^13]], i => i == Messages(bytes, share, 64) - 1 ? EveryChannel[^13..] : [Local])),
+        ("records of two sessions by turns", (bytes, share) => Fullest(
+            bytes, Messages(bytes, share, 16), [.. TwoSessions, 0x40, 0, 0, 20, 0, 1, 253, 4, 0x86], i => [Local, .. BitConverter.GetBytes(Start + (uint)(i % 2))])),
         ("records with a developer's power beside their own", (bytes, share) => Fullest(
             bytes,
-            Messages(bytes, share, 24),
+            Messages(bytes, share, 40),
             [
                 0x44, 0, 0, 206, 0, 5, 0, 1, 2, 1, 1, 2, 2, 1, 2, 14, 2, 0x84, 15, 1, 2, 4, 0, 0, 2, 20, 0, 7,
-                0x60, 0, 0, 20, 0, 1, 7, 2, 0x84, 1, 0, 1, 0,
+                0x60, 0, 0, 20, 0, 1, 7, 1, 2, 1, 0, 1, 0,
             ],
-            _ => [Local, 200, 0, 210])),
+            _ => [Local, 200, 210])),
         ("sessions", (bytes, share) => Fullest(bytes, Messages(bytes, share, 1200), [0x40, 0, 0, 18, 0, 0], _ => [Local])),
-        ("sets", (bytes, share) => Fullest(bytes, Messages(bytes, share, 256), [0x40, 0, 0, 225, 0, 0], _ => [Local])),
+        ("sets", (bytes, share) => Fullest(bytes, Messages(bytes, share, 320), [0x40, 0, 0, 225, 0, 0], _ => [Local])),
         ("laps", (bytes, share) => Fullest(bytes, Messages(bytes, share, 64), [.. OneRecord, 0x40, 0, 0, 19, 0, 0], _ => [Local])),
         ("stops and starts", (bytes, share) => Fullest(
-            bytes, Messages(bytes, share, 64), [.. OneRecord, 0x40, 0, 0, 21, 0, 3, 253, 4, 0x86, 0, 1, 0, 1, 1, 0], i => [Local, .. BitConverter.GetBytes(Start + (uint)i), 0, (byte)(1 - (i % 2))])),
-        ("beat intervals", (bytes, share) => Fullest(bytes, Messages(bytes, share, 80), [.. OneRecord, 0x40, 0, 0, 78, 0, 1, 0, 2, 0x84], _ => [Local, 0x20, 3])),
+            bytes, Messages(bytes, share, 128), [.. OneRecord, 0x40, 0, 0, 21, 0, 3, 253, 4, 0x86, 0, 1, 0, 1, 1, 0], i => [Local, .. BitConverter.GetBytes(Start + (uint)i), 0, (byte)(1 - (i % 2))])),
+        ("beat intervals", (bytes, share) => Fullest(bytes, Messages(bytes, share, 32), [.. OneRecord, 0x40, 0, 0, 78, 0, 1, 0, 2, 0x84], _ => [Local, 0x20, 3])),
         ("beats of a strap", (bytes, share) => Fullest(
-            bytes, Messages(bytes, share, 64), [.. OneRecord, .. Anchor, 0x40, 0, 0, 132, 0, 2, 6, 2, 2, 10, 3, 0x0D], i => [Local, 70, 71, (byte)(i & 0xFF), 0x40, (byte)((i >> 4) & 0xFF)])),
-        ("minutes of heart rate", (bytes, share) => Fullest(bytes, Messages(bytes, share, 80), [.. Zone, 0x40, 0, 0, 55, 0, 2, 253, 4, 0x86, 27, 1, 2], i => [Local, .. BitConverter.GetBytes(Start + (60 * (uint)i)), 60])),
-        ("one walk without end", (bytes, share) => Fullest(bytes, Messages(bytes, share, 580), [.. Zone, 0x40, 0, 0, 55, 0, 3, 253, 4, 0x86, 5, 1, 0, 3, 4, 0x86], i => Walked(i, i))),
-        ("walks of ten minutes", (bytes, share) => Fullest(bytes, Messages(bytes, share, 580 * 10 / 14), [.. Zone, 0x40, 0, 0, 55, 0, 3, 253, 4, 0x86, 5, 1, 0, 3, 4, 0x86], i => Walked(i, i - (4 * (i / 14)) - Math.Max(0, (i % 14) - 10)))),
-        ("parts of one set", (bytes, share) => Parts(bytes, Messages(bytes, share, 256), [0x40, 0, 0, 225, 0, 0, 0])),
+            bytes, Messages(bytes, share, 160), [.. OneRecord, .. Anchor, 0x40, 0, 0, 132, 0, 2, 6, 2, 2, 10, 3, 0x0D], i => [Local, 70, 71, (byte)(i & 0xFF), 0x40, (byte)((i >> 4) & 0xFF)])),
+        ("minutes of heart rate", (bytes, share) => Fullest(bytes, Messages(bytes, share, 160), [.. Zone, 0x40, 0, 0, 55, 0, 2, 253, 4, 0x86, 27, 1, 2], i => [Local, .. BitConverter.GetBytes(Start + (60 * (uint)i)), 60])),
+        ("one walk without end", (bytes, share) => Fullest(bytes, Messages(bytes, share, 660), [.. Zone, 0x40, 0, 0, 55, 0, 3, 253, 4, 0x86, 5, 1, 0, 3, 4, 0x86], i => Walked(i, i))),
+        ("walks of ten minutes", (bytes, share) => Fullest(bytes, Messages(bytes, share, 660 * 10 / 14), [.. Zone, 0x40, 0, 0, 55, 0, 3, 253, 4, 0x86, 5, 1, 0, 3, 4, 0x86], i => Walked(i, i - (4 * (i / 14)) - Math.Max(0, (i % 14) - 10)))),
+        ("parts of one set", (bytes, share) => Parts(bytes, Messages(bytes, share, 1520), [0x40, 0, 0, 225, 0, 0, 0])),
         ("parts of one session", (bytes, share) => Parts(bytes, Messages(bytes, share, 1200), [0x40, 0, 0, 18, 0, 0, 0])),
         ("empty parts", (bytes, share) => Parts(bytes, Messages(bytes, share, 1), [])),
     ];
@@ -60,7 +72,7 @@ internal static class WorstFits
     private static byte[] Walked(int minute, int counted) => [Local, .. BitConverter.GetBytes(Start + (60 * (uint)minute)), 6, .. BitConverter.GetBytes((uint)counted * 100)];
 
     /// <summary>How many of a thing the decoder takes, by what one of it costs.</summary>
-    private static int Messages(int bytes, double share, int cost) => (int)(share * ((28 << 20) + (bytes * 1.5)) / cost);
+    private static int Messages(int bytes, double share, int cost) => (int)(share * ((52L << 20) + (bytes * 3L)) / cost);
 
     /// <summary>Made in the place where it stays: its making must take less memory than reading it.</summary>
     private static byte[] Fullest(int bytes, int messages, byte[] head, Func<int, byte[]> message)
