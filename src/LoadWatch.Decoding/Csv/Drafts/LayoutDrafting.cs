@@ -35,7 +35,9 @@ public static class LayoutDrafting
             LinesBelow = linesBelow,
         };
         AskOfRepeatedNames(columns, notes);
-        return new LayoutDraft(Signed(Filled(begun, columns, notes)), notes.Found, notes.Doubts, Problem: null);
+        var layout = Signed(Filled(begun, columns, notes));
+        NameUnused(layout, columns, notes);
+        return new LayoutDraft(layout, notes.Found, notes.Doubts, Problem: null);
     }
 
     private static CsvLayout Filled(CsvLayout begun, IReadOnlyList<ColumnStudy> columns, DraftNotes notes)
@@ -72,6 +74,16 @@ public static class LayoutDrafting
             .. layout.Columns.Select(column => column.Column), .. layout.Fields.Select(field => field.Column),
         ];
         return layout with { Header = [.. all.OfType<string>().Where(name => name.Length > 0 && name != LayoutDraft.Open).Distinct(StringComparer.Ordinal)] };
+    }
+
+    /// <summary>What the layout passes over is named, so that nobody takes it for read.</summary>
+    private static void NameUnused(CsvLayout layout, IReadOnlyList<ColumnStudy> columns, DraftNotes notes)
+    {
+        var unused = columns.Select(column => column.Name).Distinct(StringComparer.Ordinal).Where(name => name != layout.SportColumn && !layout.Header.Contains(name)).ToList();
+        if (unused.Count > 0)
+        {
+            notes.Found.Add($"not used: {DraftNotes.Quoted(unused)}");
+        }
     }
 
     private static void AskOfRepeatedNames(IReadOnlyList<ColumnStudy> columns, DraftNotes notes)

@@ -236,6 +236,20 @@ public class LayoutDraftingTests
     }
 
     [Theory]
+    [InlineData("time,hr,sport,mood,gear\n2026-10-05T06:00:00Z,100,running,1,a\n2026-10-05T06:00:01Z,101,running,1,b\n", "not used: 'mood', 'gear'")]
+    [InlineData("Tag;Name;Übung;Wdh;Laune\n31.03.2026;aada;Kniebeuge;5;gut\n01.04.2026;aada;Kniebeuge;5;gut\n", "not used: 'Laune'")]
+    public void EachColumnThatTheDraftPassesOverIsNamed(string text, string expected)
+    {
+        Assert.Equal(expected, Assert.Single(Draft(text).Found, found => found.StartsWith("not used", StringComparison.Ordinal)));
+    }
+
+    [Fact]
+    public void WhereEveryColumnIsUsedNoneIsNamedAsNotUsed()
+    {
+        Assert.DoesNotContain(Draft(Finnish).Found, found => found.StartsWith("not used", StringComparison.Ordinal));
+    }
+
+    [Theory]
     [InlineData("", "the file is empty")]
     [InlineData("one column\n1\n2\n", "no mark parts the rows into columns")]
     [InlineData("1,2\n3,4\n5,6\n", "no line of column names")]
