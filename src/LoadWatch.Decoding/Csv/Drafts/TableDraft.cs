@@ -10,7 +10,7 @@ internal static class TableDraft
 
     public static CsvLayout Of(CsvLayout begun, CsvTimeColumn? time, IReadOnlyList<ColumnStudy> columns, DraftNotes ofTime, DraftNotes notes)
     {
-        var (kind, fields) = TradeWords.Fields.Select(kind => (Kind: kind.Key, Fields: Fields(kind.Value, columns))).MaxBy(kind => kind.Fields.Count);
+        var (kind, fields) = TradeWords.Fields.Select(kind => (Kind: kind.Key, Fields: Fields(kind.Value, columns))).MaxBy(kind => Weight(kind.Kind, kind.Fields));
         notes.Doubt("kind", fields.Count == 0
             ? "neither a time series nor a table whose columns are known by name: taken for sessions; add \"fields\", README.md names them"
             : $"taken for {Words<CsvKind>.Of(kind)} for the sake of {DraftNotes.Quoted(fields.Select(field => field.Column.Name))}: is a row one of these?");
@@ -20,6 +20,13 @@ internal static class TableDraft
             Fields = [.. fields.Select(field => Field(field.Name, field.Column, notes)), .. kind == CsvKind.Sessions ? Quantities(columns, notes) : []],
         };
     }
+
+    /// <summary>How many fields speak for the kind. What another kind has too tells nothing, nor do the fields of a plan or of answers without the one that makes them so.</summary>
+    private static int Weight(CsvKind kind, List<(string Name, ColumnStudy Column)> fields) => kind switch
+    {
+        CsvKind.Plan or CsvKind.Answers when !fields.Exists(field => TableKind.Of(kind).Needed.Contains(field.Name)) => 0,
+        _ => fields.Count(field => field.Name is not "hardness"),
+    };
 
     private static List<(string Name, ColumnStudy Column)> Fields(IReadOnlyList<(string Field, string[] Words)> known, IReadOnlyList<ColumnStudy> columns)
     {
@@ -42,9 +49,13 @@ internal static class TableDraft
             ("minutes", { IsNumber: false, Times.Fits: true }) => column.Times.Fitting[0].Format.Count(c => c == ':') == 2 ? "h:mm:ss" : Asked(column, "h:mm", "m:ss", notes),
             ("minutes", { Unit: "s" or "h" }) => column.Unit,
             ("kilograms", { Unit: "lb" }) => "lb",
+            ("seconds", { IsNumber: false, Times.Fits: true }) => column.Times.Fitting[0].Format.Count(c => c == ':') == 2 ? "h:mm:ss" : Asked(column, "m:ss", "h:mm", notes),
+            ("seconds", { Unit: "min" or "h" }) => column.Unit,
+            ("bar_speed", { Unit: "m/s" or "km/h" }) => column.Unit,
+            ("bar_speed", _) => Open(column, "the speed of the bar in m/s or km/h", notes),
             _ => null,
         };
-        if (name is "day" or "test" or "outcome")
+        if (name is "day" or "test" or "outcome" or "plan" or "answer")
         {
             notes.Doubt(FieldsKey, $"add \"words\" that say what the cells of {DraftNotes.Quoted(column.Name)} stand for: {DraftNotes.Quoted(column.Shown.Take(10))}");
         }
@@ -57,6 +68,12 @@ internal static class TableDraft
     {
         notes.Doubt(FieldsKey, $"{DraftNotes.Quoted(column.Name)} is taken as {taken}, or is it {other}?");
         return taken;
+    }
+
+    private static string Open(ColumnStudy column, string question, DraftNotes notes)
+    {
+        notes.Doubt(FieldsKey, $"{DraftNotes.Quoted(column.Name)}, {DraftNotes.Number(column.Numbers.Lowest)} to {DraftNotes.Number(column.Numbers.Highest)}, is {question}?");
+        return LayoutDraft.Open;
     }
 
     /// <summary>Distance and the highest speed of a session.</summary>

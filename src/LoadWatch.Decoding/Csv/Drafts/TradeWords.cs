@@ -67,6 +67,9 @@ internal static class TradeWords
                 ("set", ["set", "satz", "série", "serie", "sarja"]),
                 ("machine", ["machine", "gerät", "maschine", "appareil", "máquina", "macchina", "apparaat", "maskin", "laite"]),
                 ("repetitions_in_reserve", ["reserve", "reserven", "réserve", "reserva", "riserva"]),
+                ("seconds", ["seconds", "seconds held", "hold time", "sekunden", "haltezeit", "secondes", "segundos", "secondi", "seconden", "sekunder", "sekunnit", "pitoaika"]),
+                ("bar_speed", ["bar speed", "bar velocity", "hantelgeschwindigkeit", "vitesse de la barre", "velocidad de la barra", "velocità del bilanciere", "velocidade da barra", "tangon nopeus"]),
+                ("hardness", ["hardness", "rpe", "effort", "härte", "anstrengung", "ressenti", "esfuerzo", "sforzo", "esforço", "inspanning", "ansträngning", "rasittavuus"]),
             ],
             [CsvKind.Tests] =
             [
@@ -84,5 +87,18 @@ internal static class TradeWords
                 ("start", ["start", "beginn", "début", "inicio", "inizio", "aanvang", "alku"]),
             ],
             [CsvKind.Days] = [("day", ["day", "status", "attendance", "absence", "anwesenheit", "zustand", "présence", "asistencia", "presenza", "närvaro", "läsnäolo"])],
+            [CsvKind.Plan] =
+            [
+                ("plan", ["plan", "planned", "geplant", "planung", "prévu", "planificado", "pianificato", "planejado", "gepland", "planerat", "suunnitelma"]),
+                ("start", ["start", "beginn", "début", "inicio", "inizio", "aanvang", "alku"]),
+                ("end", ["end", "ende", "fin", "fine", "fim", "einde", "slut", "loppu"]),
+            ],
+            [CsvKind.Answers] =
+            [
+                ("answer", ["answer", "antwort", "réponse", "respuesta", "risposta", "resposta", "antwoord", "svar", "vastaus"]),
+                ("rule", ["rule", "regel", "règle", "regla", "regola", "regra", "sääntö"]),
+                ("file", ["file", "datei", "fichier", "archivo", "arquivo", "bestand", "tiedosto"]),
+                ("note", ["note", "comment", "remark", "notiz", "bemerkung", "kommentar", "remarque", "nota", "opmerking", "anteckning", "huomautus"]),
+            ],
         };
 }

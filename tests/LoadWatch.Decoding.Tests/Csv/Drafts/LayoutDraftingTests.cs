@@ -235,6 +235,59 @@ public class LayoutDraftingTests
         Assert.Empty(layout.Validate());
     }
 
+    [Fact]
+    public void TheHardnessTheSecondsAndTheSpeedOfASetAreFound()
+    {
+        const string text = "Datum;Name;Übung;RPE;Sekunden;Hantelgeschwindigkeit m/s\n31.03.2026;aada;Unterarmstütz;7;40;\n31.03.2026;aada;Kniebeuge;8;;0,55\n";
+
+        var layout = Draft(text).Layout!;
+
+        Assert.Equal(CsvKind.Sets, layout.Kind);
+        Assert.Equal(
+            [("exercise", null), ("seconds", null), ("bar_speed", "m/s"), ("hardness", null)],
+            layout.Fields.Select(field => (field.Field, field.Unit)));
+        Assert.Empty(layout.Validate());
+        Assert.Equal(2, CsvFiles.Decode(text, layout).Table!.Rows.Count);
+    }
+
+    [Fact]
+    public void TheUnitOfABarSpeedThatStatesNoneIsAsked()
+    {
+        var draft = Draft("date;name;exercise;reps;bar speed\n2026-03-31;aada;squat;5;0.55\n2026-03-31;aada;squat;5;0.5\n");
+
+        Assert.Equal("?", Assert.Single(draft.Layout!.Fields, field => field.Field == "bar_speed").Unit);
+        Assert.NotEmpty(draft.Layout.Validate());
+        Assert.Contains(draft.Doubts, doubt => doubt == "fields: 'bar speed', 0.5 to 0.55, is the speed of the bar in m/s or km/h?");
+    }
+
+    [Fact]
+    public void HowHardASessionWasMakesItNoSet()
+    {
+        var layout = Draft("date;name;exercise;minutes;effort\n2026-03-31;aada;rowing;50;6\n2026-04-01;aada;rowing;40;5\n").Layout!;
+
+        Assert.Equal((CsvKind.Sessions, "minutes,rating"), (layout.Kind, string.Join(',', layout.Fields.Select(field => field.Field))));
+    }
+
+    [Theory]
+    [InlineData("Datum;Name;Geplant;Beginn;Ende\n31.03.2026;aada;match;17:30;19:00\n01.04.2026;aada;rest;;\n", CsvKind.Plan, "plan,start,end")]
+    [InlineData("date;name;answer;rule;comment\n2026-03-31;aada;ill;;cold\n2026-04-01;aada;seen;;\n", CsvKind.Answers, "answer,rule,note")]
+    public void APlanAndAnswersAreDraftedByTheirFields(string text, CsvKind kind, string fields)
+    {
+        var draft = Draft(text);
+
+        var layout = draft.Layout!;
+        Assert.Equal((kind, fields), (layout.Kind, string.Join(',', layout.Fields.Select(field => field.Field))));
+        Assert.Contains(draft.Doubts, doubt => doubt.StartsWith("fields: add \"words\"", StringComparison.Ordinal));
+        Assert.Empty(layout.Validate());
+        Assert.Equal(2, CsvFiles.Decode(text, layout).Table!.Rows.Count);
+    }
+
+    [Fact]
+    public void ABeginningAndAnEndWithoutWhatIsPlannedMakeNoPlan()
+    {
+        Assert.NotEqual(CsvKind.Plan, Draft("date;name;start;end\n2026-03-31;aada;17:30;19:00\n2026-04-01;aada;17:30;19:00\n").Layout!.Kind);
+    }
+
     [Theory]
     [InlineData("time,hr,sport,mood,gear\n2026-10-05T06:00:00Z,100,running,1,a\n2026-10-05T06:00:01Z,101,running,1,b\n", "not used: 'mood', 'gear'")]
     [InlineData("Tag;Name;Übung;Wdh;Laune\n31.03.2026;aada;Kniebeuge;5;gut\n01.04.2026;aada;Kniebeuge;5;gut\n", "not used: 'Laune'")]
