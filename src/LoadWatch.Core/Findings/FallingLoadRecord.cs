@@ -33,6 +33,9 @@ internal sealed class FallingLoadRecord : RuleRecord
         ? "whether less was meant; if not, going back up in small steps, no catching up."
         : "asking whether less was meant; if not, going back up in small steps, no catching up.";
 
+    /// <summary>A recording to come adds load.</summary>
+    public override int? WaitedDays(Finding finding, RuleLimits limits) => 0;
+
     public override string Returned(FindingKey key, RuleLimits limits, bool self) =>
         FormattableString.Invariant($"{KeyWords.Load(key)} is back at {100 * limits.FallingLoad.Return:0.##} % of {KeyWords.Your(self)} usual or above");
 }

@@ -53,7 +53,11 @@ public readonly record struct FindingKey(string Person, string Rule, BodyRegion?
 /// <param name="Formula">In words and symbols.</param>
 /// <param name="Source">Authors, year, title; or <c>a choice</c>.</param>
 /// <param name="Inputs">Inputs and intermediate values.</param>
-public sealed record Evidence(string Formula, string Source, IReadOnlyList<EvidenceItem> Inputs);
+public sealed record Evidence(string Formula, string Source, IReadOnlyList<EvidenceItem> Inputs)
+{
+    /// <summary>The value of an input; null where it is unknown or there is none of the name.</summary>
+    public double? this[string name] => Inputs.FirstOrDefault(item => item.Name == name)?.Value;
+}
 
 /// <summary>One number of the evidence; null is unknown.</summary>
 public sealed record EvidenceItem(string Name, double? Value, string Unit, string? Note = null);

@@ -34,6 +34,9 @@ internal sealed class LoadRatioRecord : RuleRecord
 
     public override string Response(FindingKey key, bool self) => $"comparing with what {(self ? "you had" : "was")} planned: an easier day, or keeping the plan if it was meant.";
 
+    /// <summary>Seven days that were made whole from the known ones.</summary>
+    public override int? WaitedDays(Finding finding, RuleLimits limits) => finding.Evidence["coverage_7"] < 1 ? 0 : null;
+
     public override string Returned(FindingKey key, RuleLimits limits, bool self) =>
         FormattableString.Invariant($"{KeyWords.Load(key)} is back within {limits.LoadRatio.Return:0.##} times {KeyWords.Your(self)} usual week");
 }

@@ -58,7 +58,10 @@ public abstract class RuleRecord
     /// <summary>How an alert ended by itself.</summary>
     public abstract string Returned(FindingKey key, RuleLimits limits, bool self);
 
-    /// <summary>Days that the rule has given recordings that are missing for a finding; null: it rests on none that are missing.</summary>
+    /// <summary>
+    /// Days that the rule has given recordings that are missing for a finding; null: it rests on none that are missing. What tells that little was done does, for
+    /// a recording to come may hold what is missing; what tells that much was done does only where it was made whole from a part.
+    /// </summary>
     public virtual int? WaitedDays(Finding finding, RuleLimits limits) => null;
 
     /// <summary>Every part of the record that is about no single finding, by what it is called.</summary>

@@ -33,6 +33,9 @@ internal sealed class StimulusLowRecord : RuleRecord
 
     public override string Response(FindingKey key, bool self) => $"one more day with a few heavy or fast {KeyWords.RegionSets(key)} a week, within what {(self ? "you and your" : "the person and their")} clinician allow; no catching up.";
 
+    /// <summary>A recording to come may hold a heavy-or-fast day.</summary>
+    public override int? WaitedDays(Finding finding, RuleLimits limits) => 0;
+
     public override string Returned(FindingKey key, RuleLimits limits, bool self) =>
         $"heavy or fast {KeyWords.RegionWork(key)} is back to the expected number of days";
 }

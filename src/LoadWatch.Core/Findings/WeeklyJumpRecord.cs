@@ -31,6 +31,9 @@ internal sealed class WeeklyJumpRecord : RuleRecord
 
     public override string Response(FindingKey key, bool self) => $"comparing with what {(self ? "you had" : "was")} planned: spreading the rise over more weeks, or keeping the plan if it was meant.";
 
+    /// <summary>A week that was made whole from the sessions that are there.</summary>
+    public override int? WaitedDays(Finding finding, RuleLimits limits) => finding.Evidence["acute"] == finding.Evidence["acute_known"] ? null : 0;
+
     public override string Returned(FindingKey key, RuleLimits limits, bool self) =>
         $"{KeyWords.Load(key)} of the week is no longer far above the last";
 }

@@ -25,6 +25,7 @@ public sealed class Evaluation(WorkingConfiguration configuration, Answers answe
     private void Judge(StoreSession session, Person person)
     {
         var date = DayUpdate.LastDateOver(person, now);
+        var lateness = new Lazy<Lateness>(() => LatenessOf(session, person, date));
         var review = AlertReview.Review(
             person.Id,
             date,
@@ -34,7 +35,7 @@ public sealed class Evaluation(WorkingConfiguration configuration, Answers answe
             session.Findings.Held,
             new Watching(configuration.GroupOf(person).Limits, session.Days.OfPerson(person.Id, date, date).Select(day => day.Plan).FirstOrDefault(DayPlan.None))
             {
-                Lateness = () => LatenessOf(session, person, date),
+                Lateness = () => lateness.Value,
             });
         foreach (var alert in review.Alerts)
         {

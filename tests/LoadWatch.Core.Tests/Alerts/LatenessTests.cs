@@ -1,3 +1,4 @@
+using System.Globalization;
 using LoadWatch.Alerts;
 using LoadWatch.Findings;
 using LoadWatch.Plans;
@@ -88,16 +89,42 @@ public class LatenessTests
         Assert.Equal(Training.On(15), again.Alerts[0].StandsSince);
     }
 
-    /// <summary>No other rule rests on recordings that are missing, so nobody asks how late they come.</summary>
-    [Fact]
-    public void OnlyWhereSilenceHoldsIsItAsked()
+    /// <summary>
+    /// Silence, and what tells that little was done, for a recording to come may hold more; what tells that much was done only where it was made whole from a part.
+    /// Nobody asks where the others hold how late files come.
+    /// </summary>
+    [Theory]
+    [InlineData("silence", true)]
+    [InlineData("stimulus_gap", true)]
+    [InlineData("stimulus_low", true)]
+    [InlineData("falling_load", true)]
+    [InlineData("weekly_jump", true, "acute 800", "acute_known 600")]
+    [InlineData("weekly_jump", false, "acute 800", "acute_known 800")]
+    [InlineData("weekly_jump", false)]
+    [InlineData("load_ratio", true, "coverage_7 0.857142857")]
+    [InlineData("load_ratio", false, "coverage_7 1")]
+    [InlineData("load_ratio", false)]
+    [InlineData("session_spike", false)]
+    [InlineData("hard_days", false)]
+    [InlineData("monotony", false)]
+    [InlineData("not_usable", false)]
+    public void WhatRestsOnRecordingsThatAreMissingWaitsAndNothingElse(string rule, bool waits, params string[] inputs)
     {
-        var watching = new Watching(new RuleLimits(), DayPlan.None) { Lateness = () => throw new InvalidOperationException("asked") };
-        var load = Find(5, since: 5) with { Rule = "load_ratio" };
+        var finding = Find(12, since: 10) with { Rule = rule, Evidence = new Evidence("f", "a choice", [.. inputs.Select(Item)]) };
+        var asked = false;
+        var watching = new Watching(new RuleLimits(), DayPlan.None) { Lateness = () => Told(new Lateness(5, 20)) };
 
-        Assert.Single(AlertReview.Review("anna", Training.On(5), [], _ => 0, [load], (_, _) => true, watching).Alerts);
-        Assert.Throws<InvalidOperationException>(() => AlertReview.Review("anna", Training.On(5), [], _ => 0, [Find(5, since: 5)], (_, _) => true, watching));
+        Assert.Equal(waits ? 0 : 1, AlertReview.Review("anna", Training.On(12), [], _ => 0, [finding], (_, _) => true, watching).Alerts.Count);
+        Assert.Equal(waits, asked);
+
+        Lateness Told(Lateness late)
+        {
+            asked = true;
+            return late;
+        }
     }
+
+    private static EvidenceItem Item(string text) => new(text.Split(' ')[0], double.Parse(text.Split(' ')[1], CultureInfo.InvariantCulture), "");
 
     private static AlertReviewResult Review(int day, Alert[] current, Finding finding, int late = 5) => AlertReview.Review(
         "anna", Training.On(day), current, _ => 0, [finding], (_, _) => true, new Watching(new RuleLimits(), DayPlan.None) { Lateness = () => new Lateness(late, 20) });
