@@ -1,7 +1,9 @@
 using System.Globalization;
 using System.Security.Cryptography;
 using System.Text;
+using System.Text.RegularExpressions;
 using LoadWatch.Alerts;
+using LoadWatch.Findings;
 using LoadWatch.Rows;
 using LoadWatch.Service.Commands;
 using LoadWatch.Service.Tests.Pipeline;
@@ -15,7 +17,7 @@ namespace LoadWatch.Service.Tests.Metamorphic;
 /// Everything that a store derived, as text that is equal where the stores are: states of arrivals, every derived table column by column, rows in force, alerts
 /// that stand. Left out, since it tells how the contents came and not what they say:
 /// names and packing (sightings, containers, the scope under which a row of a table stands; a row is compared as it is in force),
-/// moments (since when a row says what it says, when an alert was raised and judged; alerts of silence, which wait as long as files have come late: their findings are compared), and how often days were asked for.
+/// moments (since when a row says what it says, when an alert was raised and judged; alerts that may wait as long as files have come late: their findings are compared), and how often days were asked for.
 /// </summary>
 internal static class Digest
 {
@@ -26,6 +28,9 @@ internal static class Digest
         ["person_state"] = ["dirty_from", "marks"],
     };
 
+    /// <summary>Rules whose findings rest on recordings that are missing, always or at times (<see cref="RuleRecord.WaitedDays"/>).</summary>
+    private static readonly string[] MayWait = ["silence", "stimulus_gap", "stimulus_low", "falling_load", "weekly_jump", "load_ratio"];
+
     /// <summary>Compared as rows in force instead, or a mark of what is done.</summary>
     private static readonly string[] OtherwiseCompared = ["table_row", "table_version", "derived_state"];
 
@@ -34,7 +39,7 @@ internal static class Digest
     [
         "# arrivals", .. Arrivals(folder),
         "# rows in force", .. folder.Rows(),
-        "# alerts", .. Standing(folder).Where(alert => !alert.Contains("Rule = silence", StringComparison.Ordinal)),
+        "# alerts", .. Standing(folder, alert => !MayWait.Contains(alert.Key.Rule, StringComparer.Ordinal)),
         .. derived.Except(OtherwiseCompared, StringComparer.Ordinal).Order(StringComparer.Ordinal).SelectMany(table => Rows(folder, table).Prepend($"# {table}")),
         "# activities with their tables", MaskFiles(folder.Export("activities")),
     ]);
@@ -51,10 +56,10 @@ internal static class Digest
         return [.. before.Except(Filled(folder), StringComparer.Ordinal)];
     }
 
-    /// <summary>Alerts whose finding holds.</summary>
-    public static IEnumerable<string> Standing(WorkingFolder folder) => folder.Read((_, session) => session.Alerts.All())
-        .Where(alert => alert.State is AlertState.Unacknowledged or AlertState.Acknowledged)
-        .Select(alert => $"{alert.Key} {alert.Severity} {alert.Text}")
+    /// <summary>Alerts whose finding holds, without what they say of how late files come, which nights alone can know.</summary>
+    public static IEnumerable<string> Standing(WorkingFolder folder, Func<Alert, bool>? which = null) => folder.Read((_, session) => session.Alerts.All())
+        .Where(alert => alert.State is AlertState.Unacknowledged or AlertState.Acknowledged && which?.Invoke(alert) != false)
+        .Select(alert => $"{alert.Key} {alert.Severity} {Regex.Replace(alert.Text, " Files usually come within [0-9]+ days?\\.$", "", RegexOptions.None, TimeSpan.FromSeconds(5))}")
         .Order(StringComparer.Ordinal);
 
     /// <summary>The name that is shown for each content that is no archive, by its hash.</summary>
@@ -67,7 +72,7 @@ internal static class Digest
     private static IEnumerable<Arrival> Contents(IEnumerable<Arrival> arrivals) => arrivals.Where(arrival => arrival.Kind is not ("gzip" or "zip"));
 
     private static string MaskFiles(string lines) =>
-        System.Text.RegularExpressions.Regex.Replace(lines, "\"file\":\"[^\"]*\"", Masked, System.Text.RegularExpressions.RegexOptions.None, TimeSpan.FromSeconds(5));
+        Regex.Replace(lines, "\"file\":\"[^\"]*\"", Masked, RegexOptions.None, TimeSpan.FromSeconds(5));
 
     private static List<string> Filled(WorkingFolder folder)
     {
