@@ -87,13 +87,8 @@ internal static class TableDraft
                 continue;
             }
 
-            var isStated = column.Unit is { } stated && units.Contains(stated);
-            if (!isStated)
-            {
-                notes.Doubt(FieldsKey, $"{DraftNotes.Quoted(column.Name)}, {DraftNotes.Number(column.Numbers.Lowest)} to {DraftNotes.Number(column.Numbers.Highest)}, is {quantity} in {string.Join(" or ", units)}?");
-            }
-
-            yield return new CsvField { Column = column.Name, Field = QuantityRole.Word, Quantity = quantity, Unit = isStated ? column.Unit : LayoutDraft.Open };
+            var unit = column.Unit is { } stated && units.Contains(stated) ? stated : Open(column, $"{quantity} in {string.Join(" or ", units)}", notes);
+            yield return new CsvField { Column = column.Name, Field = QuantityRole.Word, Quantity = quantity, Unit = unit };
         }
     }
 
